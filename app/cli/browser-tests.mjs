@@ -1,0 +1,92 @@
+import { existsSync, mkdirSync, rmSync } from "node:fs";
+import { join } from "node:path";
+import { build } from "./build.mjs";
+import { asCheck } from "./checks.mjs";
+import { makeDatabase } from "./database.mjs";
+import { installDebianPackages } from "./debian.mjs";
+import { lastLinesOf } from "./logs.mjs";
+import { freePort, loopback } from "./ports.mjs";
+import { prepareDatabase } from "./prepare.mjs";
+import { packageProgram, root } from "./project.mjs";
+import { Sentence } from "./sentence.mjs";
+import { serveBuild } from "./server.mjs";
+import { tallyPlaywright } from "./tally.mjs";
+import { accessTo, templateName } from "./test-database.mjs";
+
+/** Debian's browser: Playwright does not bring one of its own here. */
+const chromium = "/usr/bin/chromium";
+
+const databaseName = "planeward_browser";
+
+/**
+ * Makes the production build and serves it, with demo data, from a copy of the template.
+ *
+ * @param {import("./checks.mjs").Checks} checks
+ * @param {{ folder: string, database: import("./database.mjs").Database, accountsFile: string }} options
+ * @returns {Promise<{ port: number, logFile: string }>}
+ */
+async function serveForTests({ keeper, env }, { folder, database, accountsFile }) {
+  const access = accessTo(database, databaseName);
+  await makeDatabase(keeper, database, databaseName, templateName);
+  await prepareDatabase(keeper, access, { accountsFile, env });
+  const port = await freePort();
+  const logFile = join(folder, "server.log");
+  await serveBuild(keeper, { port, logFile, env: { ...env, DATABASE_URL: access.appUrl } });
+  return { port, logFile };
+}
+
+/**
+ * @param {import("./checks.mjs").Checks} checks
+ * @param {{ folder: string, database: import("./database.mjs").Database, filters: string[] }} options
+ * @returns {Promise<import("./tally.mjs").Tally>}
+ */
+async function runPlaywright(checks, { folder, database, filters }) {
+  const accountsFile = join(folder, "demo-accounts.json");
+  const { port, logFile } = await serveForTests(checks, { folder, database, accountsFile });
+  const report = join(folder, "playwright.json");
+  const home = join(folder, "home");
+  mkdirSync(home);
+  const code = await checks.program(
+    [packageProgram("playwright"), "test", "--config=.config/playwright.config.ts", "--reporter=list,json", ...filters],
+    {
+      env: {
+        BASE_URL: `http://${loopback}:${port}`,
+        DEMO_ACCOUNTS_FILE: accountsFile,
+        PLAYWRIGHT_JSON_OUTPUT_FILE: report,
+        // The browser writes into its user's home.
+        HOME: home,
+      },
+      // An interrupt lets it close its browsers.
+      stop: [
+        ["SIGINT", 10_000],
+        ["SIGKILL", 5_000],
+      ],
+    },
+  );
+  const tally = tallyPlaywright(report, code);
+  if (tally.failed) console.log(`\nThe server's last lines:\n${lastLinesOf(logFile, 40)}`);
+  return tally;
+}
+
+/**
+ * The production build, always made anew, and everything that Playwright runs against it.
+ *
+ * @param {import("./checks.mjs").Checks} checks
+ * @param {{ folder: string, database: import("./database.mjs").Database | undefined, filters: string[] }} options
+ */
+export async function runBrowserTests(checks, { folder, database, filters }) {
+  const { keeper, env } = checks;
+  const built = await checks.count("build", async () => asCheck((await build(keeper, { env })).code));
+
+  let failed = 0;
+  try {
+    ({ failed } = await checks.count("playwright", async () => {
+      if (!existsSync(chromium)) await installDebianPackages(keeper, "Chromium", ["chromium"]);
+      if (!database || built.failed) throw new Sentence("No browser test was run: there is nothing to run it against.");
+      return runPlaywright(checks, { folder, database, filters });
+    }));
+  } finally {
+    // Traces are kept for the failures that they explain.
+    if (!failed) rmSync(join(root, "test-results"), { recursive: true, force: true });
+  }
+}

@@ -1,0 +1,56 @@
+import type { Plot, PlotFrame } from "../drawings/plot.ts";
+import { plotScale } from "../drawings/plotScale.ts";
+import { seriesValue } from "../drawings/seriesValue.ts";
+import { axisValue } from "./axisValue.ts";
+
+export interface PlotReadOutProps {
+  plot: Plot;
+  xName: string;
+  /** The x that is read. */
+  at: number;
+  frame: PlotFrame;
+  onRead: (x: number) => void;
+}
+
+/** Arrow keys go through the axis in this many steps. */
+const STEPS = 100;
+const THUMB = 12;
+
+/**
+ * Reads the curves at one x. The control is a native range laid along the axis: arrow keys, Page keys, touch and screen
+ * readers work as everywhere, and the values are its spoken text.
+ */
+export function PlotReadOut({ plot, xName, at, frame, onRead }: PlotReadOutProps) {
+  const share = plotScale(plot.x, 0, STEPS)(at);
+  const values = plot.series.flatMap((series) => {
+    const value = seriesValue(plot, series, at);
+    return value === null ? [] : [{ series, text: plot.y.format(value) }];
+  });
+  const spoken = [plot.x.format(at), ...values.map(({ series, text }) => `${series.label} ${text}`)].join("; ");
+  return (
+    <div className="min-h-14">
+      <input
+        type="range"
+        className="plot-cursor block"
+        style={{ marginLeft: frame.left - THUMB / 2, width: frame.right - frame.left + THUMB }}
+        min={0}
+        max={STEPS}
+        step={1}
+        value={Math.round(share)}
+        aria-label={`Read along ${xName.toLowerCase()}`}
+        aria-valuetext={spoken}
+        onChange={(event) => onRead(axisValue(plot.x, event.currentTarget.valueAsNumber / STEPS))}
+      />
+      <p className="flex flex-wrap gap-x-4 text-label" aria-hidden="true">
+        <b>
+          {xName} {plot.x.format(at)}
+        </b>
+        {values.map(({ series, text }) => (
+          <span key={series.id} className="whitespace-nowrap">
+            <span className="text-quiet">{series.label}</span> {text}
+          </span>
+        ))}
+      </p>
+    </div>
+  );
+}

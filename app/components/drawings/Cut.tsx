@@ -1,0 +1,254 @@
+import { BowFigure, type BowFigureProps } from "./BowFigure.tsx";
+import { colour } from "./colour.ts";
+import { coordinate } from "./coordinate.ts";
+import { CutBand } from "./CutBand.tsx";
+import { CutKey } from "./CutKey.tsx";
+import type { CutLayer } from "./cutLayer.ts";
+import { CUT, cutLayout, labelBaselines, NAME_SIZE, type CutPlace } from "./cutLayout.ts";
+import { CutPart } from "./CutPart.tsx";
+
+/** The words at one end of the cut, with the link that adds a film there. */
+export interface CutEnd {
+  words: string;
+  add?: { words: string; href: string };
+}
+
+export interface CutProps {
+  /** Top to bottom as drawn: unbonded device side up; bonded back side up, adhesive and carrier below. */
+  layers: readonly CutLayer[];
+  top: CutEnd;
+  bottom: CutEnd;
+  label: string;
+  /** Address that selects a layer; makes every layer a link that works without scripts. */
+  hrefFor?: (index: number) => string;
+  /** Selects a layer in place; with hrefFor it replaces the navigation, alone it makes every layer a button. */
+  onSelect?: (index: number) => void;
+  /** Explains heights and arrows under the cut. */
+  showKey?: boolean;
+  /** The free shape that results, under everything. */
+  shape?: Pick<BowFigureProps, "diameter" | "shape" | "deviceSideUp" | "holding" | "exaggeration"> & {
+    head: string;
+    note: string;
+  };
+}
+
+const KEY_HEIGHT = 124;
+const SHAPE_HEIGHT = 84;
+
+/**
+ * The cut: a stack drawn layer by layer on a compressed scale, with its thicknesses, stresses and sources. It is the
+ * editor's list of layers: each is one focusable part. Arrow keys move between layers, Enter selects.
+ */
+export function Cut(props: CutProps) {
+  const { layers, top, bottom, label, hrefFor, onSelect, showKey = false, shape } = props;
+  const layout = cutLayout(
+    layers.map((layer) => ({
+      thickness: layer.thickness,
+      name: layer.name,
+      notes: layer.assumed ? [...layer.notes, "assumed"] : layer.notes,
+    })),
+    top.add ? 76 : 58,
+  );
+  const parts = layers.flatMap((layer, index) => {
+    const place = layout.places[index];
+    return place ? [{ layer, place, index }] : [];
+  });
+  const endY = layout.bottom + (bottom.add ? 48 : 28);
+  const keyY = Math.max(endY, layout.foot) + 28;
+  const shapeY = showKey ? keyY + KEY_HEIGHT : Math.max(endY, layout.foot) + 12;
+  const height = shape ? shapeY + SHAPE_HEIGHT : showKey ? shapeY : Math.max(endY, layout.foot) + 4;
+  return (
+    <svg
+      className="block h-auto max-w-full"
+      width={CUT.width}
+      viewBox={`0 0 ${CUT.width} ${height}`}
+      role="group"
+      aria-label={label}
+    >
+      <End end={top} y={layout.top - (top.add ? 34 : 14)} />
+      <g aria-hidden="true" pointerEvents="none">
+        {parts.map(({ layer, place, index }) => (
+          <g key={index}>
+            <LabelWash layer={layer} place={place} />
+            <CutBand layer={layer} y={place.y} height={place.height} />
+            <Dimension layer={layer} place={place} />
+            <Leader layer={layer} place={place} />
+            <Words layer={layer} place={place} />
+          </g>
+        ))}
+        {parts.map(({ layer, place, index }) =>
+          layer.selected ? <Outline key={index} place={place} away={2.5} stroke={colour("copper")} /> : null,
+        )}
+      </g>
+      {parts.map(({ layer, place, index }) => (
+        <CutPart key={index} layer={layer} index={index} href={hrefFor?.(index)} onSelect={onSelect}>
+          <rect {...labelBox(place)} fill="transparent" />
+          <Outline place={place} away={0} className="hover-outline" />
+          <Outline place={place} away={5} className="focus-mark" />
+        </CutPart>
+      ))}
+      <End end={bottom} y={layout.bottom + 22} />
+      {showKey ? <CutKey y={keyY} /> : null}
+      {shape ? <Shape shape={shape} y={shapeY} /> : null}
+    </svg>
+  );
+}
+
+function End({ end, y }: { end: CutEnd; y: number }) {
+  return (
+    <>
+      <text x={CUT.left} y={y} style={{ fontWeight: 600 }}>
+        {end.words}
+      </text>
+      {end.add ? (
+        <a className="drawing-link" href={end.add.href}>
+          <text x={CUT.left} y={y + 17} style={{ fill: colour("copper"), textDecoration: "underline" }}>
+            {end.add.words}
+          </text>
+          <rect className="focus-mark" x={CUT.left - 4} y={y + 4} width={CUT.right - CUT.left + 8} height="19" />
+        </a>
+      ) : null}
+    </>
+  );
+}
+
+interface PartProps {
+  layer: CutLayer;
+  place: CutPlace;
+}
+
+function labelBox(place: CutPlace) {
+  return {
+    x: CUT.label - 6,
+    y: coordinate(place.labelY - place.labelHeight / 2),
+    width: CUT.width - CUT.label + 6,
+    height: coordinate(place.labelHeight),
+  };
+}
+
+function LabelWash({ layer, place }: PartProps) {
+  if (!layer.selected) return null;
+  return (
+    <>
+      <rect {...labelBox(place)} fill={colour("wash")} />
+      <rect {...labelBox(place)} x={CUT.width - 3} width="3" fill={colour("copper")} />
+    </>
+  );
+}
+
+/** Thickness as a dimension line left of the band, the figure right-aligned beside it. */
+function Dimension({ layer, place }: PartProps) {
+  const x = CUT.dimension;
+  const foot = place.y + place.height;
+  return (
+    <>
+      <path
+        d={`M${x - 8} ${place.y + 0.5}H${CUT.left - 4}M${x - 8} ${foot + 0.5}H${CUT.left - 4}`}
+        stroke={colour("edge")}
+        strokeWidth="0.75"
+      />
+      <path d={`M${x} ${place.y + 1}V${foot}`} stroke={colour("ink")} strokeWidth="0.75" />
+      <path d={`M${x} ${place.y + 1}l-2.4 7h4.8zM${x} ${foot}l-2.4 -7h4.8z`} fill={colour("ink")} />
+      <text
+        x={x - 12}
+        y={coordinate(place.y + place.height / 2 + 4.5)}
+        textAnchor="end"
+        style={{ fontWeight: layer.selected ? 600 : 400 }}
+      >
+        {layer.thicknessText}
+      </text>
+    </>
+  );
+}
+
+function Leader({ layer, place }: PartProps) {
+  const from = coordinate(place.y + place.height / 2);
+  const paint = colour(layer.selected ? "copper" : "edge");
+  return (
+    <>
+      <path
+        d={`M${CUT.right + 9} ${from}h5L${CUT.label - 12} ${coordinate(place.labelY)}H${CUT.label - 6}`}
+        fill="none"
+        stroke={paint}
+        strokeWidth={layer.selected ? 1.5 : 0.75}
+      />
+      <circle cx={CUT.right + 9} cy={from} r={layer.selected ? 2.5 : 1.8} fill={paint} />
+    </>
+  );
+}
+
+function Words({ layer, place }: PartProps) {
+  const baselines = labelBaselines(place);
+  return (
+    <>
+      {place.name.map((line, index) => (
+        <text
+          key={index}
+          x={CUT.label}
+          y={baselines.name[index]}
+          style={{ fontSize: NAME_SIZE, fontWeight: layer.selected ? 600 : 400 }}
+        >
+          {line}
+        </text>
+      ))}
+      {place.notes.map((line, index) => {
+        const assumed = layer.assumed === true && index === place.notes.length - 1;
+        return (
+          <text
+            key={index}
+            x={CUT.label}
+            y={baselines.notes[index]}
+            style={{ fill: colour(assumed ? "caution" : "quiet"), fontWeight: assumed ? 600 : 400 }}
+          >
+            {line}
+          </text>
+        );
+      })}
+    </>
+  );
+}
+
+function Outline(props: { place: CutPlace; away: number; stroke?: string; className?: string }) {
+  const { place, away, stroke, className } = props;
+  return (
+    <rect
+      className={className}
+      x={CUT.left - away}
+      y={place.y - away}
+      width={CUT.right - CUT.left + 2 * away}
+      height={place.height + 2 * away}
+      fill="transparent"
+      stroke={stroke}
+      strokeWidth={stroke === undefined ? undefined : 2}
+    />
+  );
+}
+
+function Shape({ shape, y }: { shape: NonNullable<CutProps["shape"]>; y: number }) {
+  return (
+    <>
+      <path d={`M16 ${y + 0.5}H448`} stroke={colour("line")} />
+      <text x="16" y={y + 24} style={{ fontWeight: 600 }}>
+        {shape.head}
+      </text>
+      <text x="16" y={y + 41} style={{ fill: colour("quiet") }}>
+        {shape.note}
+      </text>
+      <g role="img" aria-label={`${shape.head}: ${shape.note}`}>
+        <BowFigure
+          diameter={shape.diameter}
+          shape={shape.shape}
+          deviceSideUp={shape.deviceSideUp}
+          holding={shape.holding}
+          exaggeration={shape.exaggeration}
+          x={200}
+          y={y + 12}
+          width={252}
+          height={60}
+          margin={10}
+          waferStroke={2.6}
+        />
+      </g>
+    </>
+  );
+}

@@ -1,0 +1,80 @@
+import type { KeyboardEvent, ReactNode } from "react";
+import type { CutLayer } from "./cutLayer.ts";
+import { selectInPlace } from "./selectInPlace.ts";
+
+export interface CutPartProps {
+  layer: CutLayer;
+  index: number;
+  /** Address that selects the layer. */
+  href?: string;
+  /** Selects it in place. */
+  onSelect?: (index: number) => void;
+  children: ReactNode;
+}
+
+/** What one layer says to a reader who does not see the drawing. */
+function spoken(layer: CutLayer): string {
+  return [layer.name, layer.thicknessText, ...layer.notes, ...(layer.assumed ? ["assumed"] : [])].join(", ");
+}
+
+/**
+ * One layer as a focusable part of the cut: a link where there is an address, else a button, else a picture with a name.
+ */
+export function CutPart({ layer, index, href, onSelect, children }: CutPartProps) {
+  const name = { "aria-label": spoken(layer), "data-layer": index };
+  const current = layer.selected ? ("true" as const) : undefined;
+  if (href !== undefined) {
+    return (
+      <a
+        className="drawing-link"
+        href={href}
+        {...name}
+        aria-current={current}
+        onClick={selectInPlace(onSelect && (() => onSelect(index)))}
+        onKeyDown={moveFocus}
+      >
+        {children}
+      </a>
+    );
+  }
+  if (onSelect) {
+    const press = (event: KeyboardEvent<SVGGElement>) => {
+      if (event.key === "Enter" || event.key === " ") {
+        event.preventDefault();
+        onSelect(index);
+      } else {
+        moveFocus(event);
+      }
+    };
+    return (
+      <g
+        className="drawing-link"
+        role="button"
+        tabIndex={0}
+        {...name}
+        aria-pressed={layer.selected ?? false}
+        onClick={() => onSelect(index)}
+        onKeyDown={press}
+      >
+        {children}
+      </g>
+    );
+  }
+  return (
+    <g role="img" {...name}>
+      {children}
+    </g>
+  );
+}
+
+/** Up and down arrows go to the neighbouring layer. */
+function moveFocus(event: KeyboardEvent<HTMLElement | SVGElement>) {
+  const step = event.key === "ArrowDown" ? 1 : event.key === "ArrowUp" ? -1 : 0;
+  if (step === 0) return;
+  const here = Number(event.currentTarget.dataset.layer);
+  const next = event.currentTarget.closest("svg")?.querySelector(`[data-layer="${here + step}"]`);
+  if (next instanceof SVGElement) {
+    event.preventDefault();
+    next.focus();
+  }
+}

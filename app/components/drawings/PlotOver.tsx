@@ -1,0 +1,241 @@
+import type { CSSProperties } from "react";
+import { alongLabel } from "./alongLabel.ts";
+import { colour } from "./colour.ts";
+import { coordinate } from "./coordinate.ts";
+import { limitLabels } from "./limitLabels.ts";
+import type { Plot, PlotFrame, PlotScales } from "./plot.ts";
+import { PlotMarker } from "./PlotMarker.tsx";
+import { seriesValue } from "./seriesValue.ts";
+import { spreadLabels } from "./spreadLabels.ts";
+import { textWidth } from "./textWidth.ts";
+
+export interface PlotOverProps {
+  plot: Plot;
+  frame: PlotFrame;
+  scales: PlotScales;
+  textSize: number;
+  /** Series are named in a list below instead of at their ends. */
+  withoutEndLabels?: boolean;
+}
+
+/** Label pitch at the line ends, as a multiple of the text size: 18 px at 12.5. */
+const END_PITCH = 1.44;
+
+/** What lies over a plot's lines: minor ticks, limits, the regime's edge, markers, the chosen value and all labels. */
+export function PlotOver(props: PlotOverProps) {
+  const { plot, frame, scales, textSize, withoutEndLabels = false } = props;
+  const inFrame = (x: number, y: number) =>
+    x >= frame.left - 0.5 && x <= frame.right + 0.5 && y >= frame.top - 0.5 && y <= frame.bottom + 0.5;
+  return (
+    <>
+      {plot.y.minor?.map((value) => (
+        <path key={value} d={`M${frame.left} ${coordinate(scales.y(value))}h4`} stroke={colour("ink")} />
+      ))}
+      {plot.series.map((series) =>
+        series.markersAt?.map((value) => {
+          const at = seriesValue(plot, series, value);
+          if (at === null) return null;
+          const [x, y] = [scales.x(value), scales.y(at)];
+          return inFrame(x, y) ? (
+            <PlotMarker
+              key={`${series.id} ${value}`}
+              marker={series.marker}
+              x={x}
+              y={y}
+              colourToken={series.colourToken}
+            />
+          ) : null;
+        }),
+      )}
+      <XLimits {...props} />
+      <YLimits {...props} />
+      <Regime {...props} />
+      {withoutEndLabels ? null : <Along {...props} />}
+      <Chosen {...props} />
+      {withoutEndLabels ? null : <EndLabels plot={plot} frame={frame} scales={scales} textSize={textSize} />}
+    </>
+  );
+}
+
+/** Words over curves keep a rim in the colour of the ground they stand on. */
+function halo({ plot, scales }: PlotOverProps, middle: number): CSSProperties {
+  const onRegime = plot.regime !== undefined && middle < scales.x(plot.regime.upTo);
+  return {
+    paintOrder: "stroke",
+    stroke: colour(onRegime ? "wash" : "raised"),
+    strokeWidth: 3,
+    strokeLinejoin: "round",
+  };
+}
+
+/** Places of all vertical lines but the limits, px. */
+function otherVerticals({ plot, scales }: PlotOverProps): number[] {
+  return [...(plot.regime ? [scales.x(plot.regime.upTo)] : []), ...(plot.chosen ? [scales.x(plot.chosen.x)] : [])];
+}
+
+function XLimits(props: PlotOverProps) {
+  const { plot, frame, scales, textSize } = props;
+  const limits = [...(plot.xLimits ?? [])]
+    .sort((a, b) => a.value - b.value)
+    .filter((limit) => scales.x(limit.value) > frame.left + 1 && scales.x(limit.value) < frame.right - 1);
+  const lines = limits.map((limit) => scales.x(limit.value));
+  const widths = limits.map((limit) => Math.max(...limit.lines.map((line) => textWidth(line, textSize))));
+  const places = limitLabels(lines, widths, otherVerticals(props), frame);
+  const lineHeight = textSize * 1.2;
+  return limits.map((limit, index) => {
+    const place = places[index] ?? { x: 0, anchor: "start", tier: 0 };
+    const last = frame.bottom - 11 - place.tier * (limit.lines.length * lineHeight + 4);
+    return (
+      <g key={limit.value}>
+        <path
+          d={`M${coordinate(lines[index] ?? 0)} ${frame.top}V${frame.bottom}`}
+          stroke={colour("ink")}
+          strokeDasharray="2 3"
+        />
+        {limit.lines.map((line, row) => (
+          <text
+            key={line}
+            x={coordinate(place.x)}
+            y={coordinate(last - (limit.lines.length - 1 - row) * lineHeight)}
+            textAnchor={place.anchor}
+            style={{
+              ...halo(props, place.x + ((place.anchor === "end" ? -1 : 1) * (widths[index] ?? 0)) / 2),
+              fontSize: textSize,
+              fill: row === 0 ? undefined : colour("quiet"),
+            }}
+          >
+            {line}
+          </text>
+        ))}
+      </g>
+    );
+  });
+}
+
+function YLimits(props: PlotOverProps) {
+  const { plot, frame, scales, textSize } = props;
+  return plot.yLimits?.map((limit) => {
+    const y = scales.y(limit.value);
+    if (y < frame.top || y > frame.bottom) return null;
+    const below = y + textSize * 1.2 < frame.bottom - 6;
+    return (
+      <g key={limit.value}>
+        <path d={`M${frame.left} ${coordinate(y)}H${frame.right}`} stroke={colour("stop")} strokeDasharray="6 3" />
+        <text
+          x={frame.left + 6}
+          y={coordinate(below ? y + textSize * 1.2 : y - 5)}
+          style={{ ...halo(props, frame.left + 20), fontSize: textSize, fill: colour("stop") }}
+        >
+          {limit.lines.join(" ")}
+        </text>
+      </g>
+    );
+  });
+}
+
+function Regime(props: PlotOverProps) {
+  const { plot, frame, scales, textSize, withoutEndLabels } = props;
+  if (!plot.regime) return null;
+  const x = scales.x(plot.regime.upTo);
+  if (x <= frame.left || x >= frame.right) return null;
+  const y = frame.top + textSize * 1.12;
+  const insideFits = textWidth(plot.regime.inside, textSize) + 12 <= x - frame.left;
+  // The margin of the end labels is free at the top; without them there is none.
+  const room = frame.right + (withoutEndLabels ? 0 : 60) - x;
+  const rightFits = textWidth(plot.regime.label, textSize, true) + 6 <= room;
+  return (
+    <>
+      <path d={`M${coordinate(x)} ${frame.top}V${frame.bottom}`} stroke={colour("ink")} />
+      <text
+        x={coordinate(x + (rightFits ? 6 : -6))}
+        y={coordinate(y)}
+        textAnchor={rightFits ? "start" : "end"}
+        style={{ ...halo(props, x + (rightFits ? 6 : -6)), fontSize: textSize, fontWeight: 600 }}
+      >
+        {plot.regime.label}
+      </text>
+      {insideFits && rightFits ? (
+        <text
+          x={coordinate(x - 6)}
+          y={coordinate(y)}
+          textAnchor="end"
+          style={{ ...halo(props, x - 6), fontSize: textSize, fill: colour("quiet") }}
+        >
+          {plot.regime.inside}
+        </text>
+      ) : null}
+    </>
+  );
+}
+
+function Along(props: PlotOverProps) {
+  const { plot, frame, scales, textSize } = props;
+  const verticals = [...otherVerticals(props), ...(plot.xLimits ?? []).map((limit) => scales.x(limit.value))];
+  return plot.series.map((series) => {
+    if (series.labelled !== "along") return null;
+    const place = alongLabel(plot, series, scales, frame, textWidth(series.label, textSize), verticals);
+    return place ? (
+      <text
+        key={series.id}
+        x={coordinate(place.x)}
+        y={coordinate(place.y)}
+        textAnchor={place.anchor}
+        style={{ ...halo(props, place.x), fontSize: textSize, fill: colour("quiet") }}
+      >
+        {series.label}
+      </text>
+    ) : null;
+  });
+}
+
+function Chosen({ plot, frame, scales }: PlotOverProps) {
+  if (!plot.chosen) return null;
+  const x = coordinate(scales.x(plot.chosen.x));
+  const y = scales.y(plot.chosen.y);
+  const seen = y >= frame.top && y <= frame.bottom;
+  return (
+    <>
+      <path
+        d={`M${x} ${coordinate(Math.min(frame.bottom, Math.max(frame.top, y)))}V${frame.bottom}`}
+        stroke={colour("silicon")}
+      />
+      {seen ? <circle cx={x} cy={coordinate(y)} r="5" fill={colour("silicon")} /> : null}
+      <path d={`M${x} ${frame.bottom}l-4 8h8z`} fill={colour("silicon")} />
+    </>
+  );
+}
+
+function EndLabels({ plot, frame, scales, textSize }: PlotOverProps) {
+  const ends = plot.series
+    .flatMap((series) => {
+      const last = series.points.at(-1);
+      if (last === undefined || series.labelled === "along") return [];
+      const y = Math.min(frame.bottom, Math.max(frame.top, scales.y(last.y)));
+      return [{ series, x: Math.min(frame.right, scales.x(last.x)), y }];
+    })
+    .sort((a, b) => a.y - b.y);
+  const places = spreadLabels(
+    ends.map((end) => end.y),
+    ends.map(() => textSize * END_PITCH),
+    frame.top,
+    frame.bottom + textSize,
+  );
+  return ends.map(({ series, x, y }, index) => {
+    const place = places[index] ?? y;
+    return (
+      <g key={series.id}>
+        <path
+          d={`M${coordinate(x)} ${coordinate(y)}L${frame.right + 10} ${coordinate(place)}`}
+          stroke={colour(series.colourToken)}
+        />
+        <text
+          x={frame.right + 14}
+          y={coordinate(place + textSize * 0.36)}
+          style={{ fontSize: textSize, fontWeight: 600, fill: colour(series.colourToken) }}
+        >
+          {series.label}
+        </text>
+      </g>
+    );
+  });
+}

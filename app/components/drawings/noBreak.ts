@@ -1,0 +1,11 @@
+const UNITS = "(?:µm|nm|mm|cm|m|°C|K|ppm(?:/K)?|MPa|GPa|Pa|N/m|N|s|min|h|d|%|1/m|/m)";
+const VALUE_AND_UNIT = new RegExp(`(\\d) (?=${UNITS}(?![\\p{L}\\d]))`, "gu");
+const NO_BREAK_SPACE = "\u00a0";
+
+/** Ties a value to its unit and both sides of ± together, so that neither ever wraps apart from its number. */
+export function noBreak(text: string): string {
+  return text
+    .replace(VALUE_AND_UNIT, `$1${NO_BREAK_SPACE}`)
+    .replace(/ ± /g, `${NO_BREAK_SPACE}±${NO_BREAK_SPACE}`)
+    .replace(/(\bstep|\bsteps) (?=\d)/g, `$1${NO_BREAK_SPACE}`);
+}

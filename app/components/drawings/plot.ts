@@ -1,0 +1,88 @@
+import type { ColourToken } from "./colour.ts";
+
+/** Line of a series. Series differ by dash and marker as well as by hue, so that black on paper reads the same. */
+export type PlotDash = "solid" | "chain" | "dotted" | "long" | "reference" | "none";
+export type PlotMarker = "circle" | "square" | "triangle" | "none";
+
+/** Dash lengths and line width, px. */
+export const PLOT_DASHES: Readonly<Record<PlotDash, { array: string | undefined; width: number }>> = {
+  solid: { array: undefined, width: 2.2 },
+  chain: { array: "9 3 2 3", width: 1.6 },
+  dotted: { array: "2 2.5", width: 1.8 },
+  long: { array: "8 3", width: 1.4 },
+  reference: { array: "5 4", width: 1 },
+  none: { array: undefined, width: 0 },
+};
+
+export interface PlotPoint {
+  x: number;
+  y: number;
+}
+
+export interface PlotSeries {
+  id: string;
+  label: string;
+  dash: PlotDash;
+  marker: PlotMarker;
+  colourToken: ColourToken;
+  /** In ascending x. A curve simply ends where its quantity has no meaning any more. */
+  points: readonly PlotPoint[];
+  /** Where markers stand; nowhere by default. */
+  markersAt?: readonly number[];
+  /** `end`: at the line's right end (default); `along`: quiet words beside the line, for a reference. */
+  labelled?: "end" | "along";
+}
+
+export interface PlotTick {
+  value: number;
+  text: string;
+}
+
+export interface PlotAxis {
+  scale: "log" | "linear";
+  from: number;
+  to: number;
+  ticks: readonly PlotTick[];
+  /** Unlabelled ticks. */
+  minor?: readonly number[];
+  title?: string;
+  /** A value with its unit, for the read-out and the table. */
+  format: (value: number) => string;
+}
+
+/** A limit as a line across the plot; the first line of its label in ink, the others quiet. */
+export interface PlotLimit {
+  value: number;
+  lines: readonly string[];
+}
+
+/** A plot as data. The chart on a screen and the drawing on paper are made from the same one. */
+export interface Plot {
+  x: PlotAxis;
+  y: PlotAxis;
+  series: readonly PlotSeries[];
+  /** Vertical dotted lines. */
+  xLimits?: readonly PlotLimit[];
+  /** Horizontal dashed lines in the colour of a stop. */
+  yLimits?: readonly PlotLimit[];
+  /** Shaded from the left edge; `label` stands right of its line at the top, `inside` left of it. */
+  regime?: { upTo: number; label: string; inside: string };
+  /** The value that the reader has chosen: a dot, a drop line and a mark on the axis. */
+  chosen?: PlotPoint;
+  /** Stretches of x that were left out, ruled with level lines. */
+  leftOut?: readonly { from: number; to: number }[];
+}
+
+/** Bounds of the plotting area, px. */
+export interface PlotFrame {
+  left: number;
+  right: number;
+  top: number;
+  bottom: number;
+}
+
+/** What turns values into px. */
+export interface PlotScales {
+  x: (value: number) => number;
+  y: (value: number) => number;
+}

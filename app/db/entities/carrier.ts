@@ -1,0 +1,33 @@
+import { defineEntity, p, type InferEntity } from "@mikro-orm/core";
+import type { CarrierMaterial } from "#app/engine/flow/model.ts";
+import type { Measured } from "#app/engine/measured.ts";
+import { recordProperties } from "./record.ts";
+
+/** A kind of carrier wafer. */
+export const Carrier = defineEntity({
+  name: "Carrier",
+  tableName: "carrier",
+  properties: {
+    id: p.uuid().primary(),
+    name: p.text().unique(),
+    material: p.text().$type<CarrierMaterial>(),
+    note: p.text(),
+    /** m */
+    diameter: p.double(),
+    thickness: p.json<Measured>(),
+    youngsModulus: p.json<Measured>(),
+    poissonsRatio: p.json<Measured>(),
+    /** mean over `expansionRange`; null means silicon's own curve */
+    expansion: p.json<Measured>().nullable(),
+    expansionRange: p.text(),
+    density: p.json<Measured>(),
+    thicknessVariation: p.json<Measured>(),
+    temperatureLimit: p.json<Measured>(),
+    passesUltraviolet: p.boolean(),
+    passesInfrared: p.boolean(),
+    perforated: p.boolean(),
+    reuseLimit: p.integer(),
+    ...recordProperties,
+  },
+});
+export type Carrier = InferEntity<typeof Carrier>;

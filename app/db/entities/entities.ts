@@ -1,0 +1,44 @@
+import { Assessment } from "./assessment.ts";
+import { AuditEvent } from "./audit-event.ts";
+import { BondingMaterial } from "./bonding-material.ts";
+import { Carrier } from "./carrier.ts";
+import { Credential } from "./credential.ts";
+import { Equipment } from "./equipment.ts";
+import { Film } from "./film.ts";
+import { Flow } from "./flow.ts";
+import { FlowStep } from "./flow-step.ts";
+import { FlowStepFilm } from "./flow-step-film.ts";
+import { Membership } from "./membership.ts";
+import { Person } from "./person.ts";
+import { Program } from "./program.ts";
+import { Scan } from "./scan.ts";
+import { ScanFile } from "./scan-file.ts";
+import { Session } from "./session.ts";
+import { Silicon } from "./silicon.ts";
+import { SiteLimit } from "./site-limit.ts";
+import { Stack } from "./stack.ts";
+import { StackLayer } from "./stack-layer.ts";
+
+/** Every entity, listed by hand: the ORM finds nothing by itself. */
+export const entities = [
+  Person,
+  Credential,
+  Session,
+  Program,
+  Membership,
+  Film,
+  Silicon,
+  Carrier,
+  BondingMaterial,
+  Equipment,
+  SiteLimit,
+  Stack,
+  StackLayer,
+  Flow,
+  FlowStep,
+  FlowStepFilm,
+  Assessment,
+  ScanFile,
+  Scan,
+  AuditEvent,
+];

@@ -1,0 +1,39 @@
+import { defineEntity, p, type InferEntity } from "@mikro-orm/core";
+import type { StepKind } from "#app/engine/flow/model.ts";
+import type { Measured } from "#app/engine/measured.ts";
+import type { Exposure, Holding } from "#app/engine/vocabulary.ts";
+import { BondingMaterial } from "./bonding-material.ts";
+import { Carrier } from "./carrier.ts";
+import { Equipment } from "./equipment.ts";
+import { Flow } from "./flow.ts";
+import { Program } from "./program.ts";
+
+/** One step of a flow; `position` counts from 0. */
+export const FlowStep = defineEntity({
+  name: "FlowStep",
+  tableName: "flow_step",
+  indexes: [{ properties: ["flow", "position"] }],
+  properties: {
+    id: p.uuid().primary(),
+    program: () => p.manyToOne(Program),
+    flow: () => p.manyToOne(Flow).deleteRule("cascade"),
+    position: p.integer(),
+    kind: p.text().$type<StepKind>(),
+    title: p.text(),
+    /** K */
+    peakTemperature: p.double(),
+    /** s */
+    holdTime: p.double().nullable(),
+    equipment: () => p.manyToOne(Equipment).nullable(),
+    exposures: p.json<Exposure[]>(),
+    planned: p.text().$type<Holding>(),
+    siliconAfter: p.json<Measured>().nullable(),
+    trimWidth: p.json<Measured>().nullable(),
+    trimDepth: p.json<Measured>().nullable(),
+    carrier: () => p.manyToOne(Carrier).nullable(),
+    bondingMaterial: () => p.manyToOne(BondingMaterial).nullable(),
+    bondThickness: p.json<Measured>().nullable(),
+    groundFaceForce: p.json<Measured>().nullable(),
+  },
+});
+export type FlowStep = InferEntity<typeof FlowStep>;

@@ -1,0 +1,17 @@
+import { defineEntity, p, type InferEntity } from "@mikro-orm/core";
+
+/** A customer's device program: the boundary of who may see what. */
+export const Program = defineEntity({
+  name: "Program",
+  tableName: "program",
+  properties: {
+    id: p.uuid().primary(),
+    name: p.text().unique(),
+    slug: p.text().unique(),
+    /** wafer diameter, m */
+    diameter: p.double(),
+    purpose: p.text(),
+    createdAt: p.datetime(),
+  },
+});
+export type Program = InferEntity<typeof Program>;

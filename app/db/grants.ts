@@ -1,0 +1,35 @@
+/**
+ * What the plain role may do, table by table; run after every migration, so that a new table without a line here is a table
+ * that the application cannot touch. Audit, assessments and raw files can only be added.
+ */
+const ADD_ONLY = ["assessment", "scan_file", "audit_event"];
+const READ_AND_WRITE = [
+  "person",
+  "credential",
+  "session",
+  "program",
+  "membership",
+  "film",
+  "silicon",
+  "carrier",
+  "bonding_material",
+  "equipment",
+  "site_limit",
+  "stack",
+  "stack_layer",
+  "flow",
+  "flow_step",
+  "flow_step_film",
+  "scan",
+];
+
+/** SQL that gives the role its rights and nothing more. */
+export function grantStatements(role: string): string[] {
+  const quoted = `"${role.replaceAll('"', '""')}"`;
+  return [
+    `grant usage on schema public to ${quoted}`,
+    `revoke all on all tables in schema public from ${quoted}`,
+    ...ADD_ONLY.map((table) => `grant select, insert on "${table}" to ${quoted}`),
+    ...READ_AND_WRITE.map((table) => `grant select, insert, update, delete on "${table}" to ${quoted}`),
+  ];
+}

@@ -1,0 +1,43 @@
+import { randomUUID } from "node:crypto";
+import type { EntityManager } from "@mikro-orm/postgresql";
+import { Seeder } from "@mikro-orm/seeder";
+import { noteScope } from "#app/server/audit.server.ts";
+import { Film } from "../entities/film.ts";
+import { Membership } from "../entities/membership.ts";
+import { Person } from "../entities/person.ts";
+import { Program } from "../entities/program.ts";
+import { DEMO_PEOPLE } from "./demo-accounts.ts";
+import { addDemoFlow } from "./demo-flow.ts";
+import { addDemoLibrary } from "./demo-library.ts";
+import { addDemoStack, DEMO_STACKS } from "./demo-stacks.ts";
+
+const PROGRAMS = [
+  { name: "Tern", slug: "tern", diameter: 0.2, purpose: "Fan-in device with one redistribution layer, to 100 µm" },
+  { name: "Petrel", slug: "petrel", diameter: 0.3, purpose: "Thin sensor with back-side metal, to 50 µm on glass" },
+  { name: "Fulmar", slug: "fulmar", diameter: 0.3, purpose: "Stacked device with through-silicon vias, to 20 µm" },
+];
+
+/** The invented pilot line: people, library, three programs, the Tern flow whole and a stack for each program. */
+export class DemoSeeder extends Seeder {
+  override async run(em: EntityManager): Promise<void> {
+    noteScope(em, { personId: null, requestId: "demo data" });
+    const createdAt = new Date();
+    const programs = PROGRAMS.map((program) => em.create(Program, { id: randomUUID(), createdAt, ...program }));
+    for (const { email, name, siteRole, programRole, programs: slugs } of DEMO_PEOPLE) {
+      const person = em.create(Person, { id: randomUUID(), email, name, siteRole, active: true, createdAt });
+      for (const program of programs.filter(({ slug }) => slugs.includes(slug)))
+        em.create(Membership, { id: randomUUID(), person, program, role: programRole, createdAt });
+    }
+    addDemoLibrary(em);
+    await em.flush();
+
+    const films = new Map((await em.findAll(Film)).map((film) => [film.name, film]));
+    for (const stack of DEMO_STACKS) {
+      const program = programs.find(({ slug }) => slug === stack.program);
+      if (program) await addDemoStack(em, program, stack, films);
+    }
+    const tern = programs.find(({ slug }) => slug === "tern");
+    if (tern) await addDemoFlow(em, tern, films);
+    await em.flush();
+  }
+}

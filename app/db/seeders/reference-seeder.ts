@@ -1,0 +1,88 @@
+import { randomUUID } from "node:crypto";
+import type { EntityManager } from "@mikro-orm/postgresql";
+import { Seeder } from "@mikro-orm/seeder";
+import { LIMIT_DEFINITIONS, type LimitKey } from "#app/engine/rules/limits.ts";
+import { noteScope } from "#app/server/audit.server.ts";
+import { BondingMaterial } from "../entities/bonding-material.ts";
+import { Carrier } from "../entities/carrier.ts";
+import { Equipment } from "../entities/equipment.ts";
+import { Film } from "../entities/film.ts";
+import { Silicon } from "../entities/silicon.ts";
+import { SiteLimit } from "../entities/site-limit.ts";
+import { celsius, measured } from "./measured.ts";
+import { REFERENCE_BONDING_MATERIALS, REFERENCE_CARRIERS, REFERENCE_SILICON } from "./reference-bonding.ts";
+import { REFERENCE_EQUIPMENT, type ReferenceTool } from "./reference-equipment.ts";
+import { REFERENCE_FILMS } from "./reference-films.ts";
+
+/** Who made a seeded record: nobody, it came with Planeward. */
+export const delivered = () => ({
+  id: randomUUID(),
+  createdAt: new Date(),
+  createdBy: null,
+  updatedAt: new Date(),
+  updatedBy: null,
+});
+
+/** Data that every site starts with. Adds what is not there yet by name and never changes what somebody has edited. */
+export class ReferenceSeeder extends Seeder {
+  override async run(em: EntityManager): Promise<void> {
+    noteScope(em, { personId: null, requestId: "reference data" });
+    const limits = new Set((await em.findAll(SiteLimit)).map(({ key }) => key));
+    for (const [key, { value, source }] of Object.entries(LIMIT_DEFINITIONS))
+      if (!limits.has(key as LimitKey)) em.create(SiteLimit, { ...delivered(), key: key as LimitKey, value, source });
+
+    const films = new Set((await em.findAll(Film)).map(({ name }) => name));
+    for (const film of REFERENCE_FILMS) if (!films.has(film.name)) em.create(Film, { ...delivered(), ...film });
+
+    const silicon = new Set((await em.findAll(Silicon)).map(({ name }) => name));
+    for (const wafer of REFERENCE_SILICON)
+      if (!silicon.has(wafer.name)) em.create(Silicon, { ...delivered(), note: "", ...wafer });
+
+    const carriers = new Set((await em.findAll(Carrier)).map(({ name }) => name));
+    for (const carrier of REFERENCE_CARRIERS)
+      if (!carriers.has(carrier.name))
+        em.create(Carrier, {
+          ...delivered(),
+          note: "",
+          perforated: false,
+          reuseLimit: 20,
+          temperatureLimit: measured(celsius(400), null, "assumed", "common practice, no source"),
+          ...carrier,
+        });
+
+    const tools = new Set((await em.findAll(Equipment)).map(({ name }) => name));
+    for (const tool of REFERENCE_EQUIPMENT) if (!tools.has(tool.name)) em.create(Equipment, equipmentFrom(tool));
+
+    const materials = new Set((await em.findAll(BondingMaterial)).map(({ name }) => name));
+    for (const material of REFERENCE_BONDING_MATERIALS)
+      if (!materials.has(material.name))
+        em.create(BondingMaterial, {
+          ...delivered(),
+          note: "Ranges of the trade: put your own material's data in its place.",
+          thicknessVariationShare: measured(0.05, 0.02, "assumed", "common practice, no source"),
+          thermalCycles: null,
+          vacuum: "not known",
+          solvent: "not known",
+          acid: "not known",
+          base: "not known",
+          ...material,
+        });
+    await em.flush();
+  }
+}
+
+function equipmentFrom(tool: ReferenceTool) {
+  const practice = (value: number | null, unit: number) =>
+    value === null ? null : measured(value * unit, null, "assumed", "common practice, no source");
+  return {
+    ...delivered(),
+    name: tool.name,
+    note: "",
+    holding: tool.holding,
+    atPeak: tool.atPeak,
+    warpLimitEdgesUp: practice(tool.edgesUp, 1e-6),
+    warpLimitEdgesDown: practice(tool.edgesDown, 1e-6),
+    leastUnsupportedThickness: practice(tool.leastUnsupported, 1e-6),
+    largestDiameter: measured(tool.largestDiameter * 1e-3, null, "assumed", "common practice, no source"),
+  };
+}

@@ -1,0 +1,85 @@
+import type { AssessedStep, FlowAssessment } from "./assess.ts";
+import type { FlowInput } from "./model.ts";
+import { supportRank, type Outcome, type SupportClass } from "../vocabulary.ts";
+
+/** The words of an outcome as they stand alone, sentence case. */
+export const OUTCOME_WORDS: Record<Outcome, string> = {
+  clear: "Clear",
+  caution: "Caution",
+  "needs support": "Needs support",
+  "cannot judge": "Cannot judge",
+  "do not run": "Do not run",
+};
+
+/** Steps in a row that need the same support, by number. */
+export interface SupportSpan {
+  support: SupportClass;
+  from: number;
+  to: number;
+}
+
+/** The support needed along the flow, neighbours with the same need joined. */
+export function supportSpans(steps: AssessedStep[]): SupportSpan[] {
+  const spans: SupportSpan[] = [];
+  for (const { state, required } of steps) {
+    const last = spans.at(-1);
+    const support = required ?? "none fits";
+    if (last && last.support === support) last.to = state.number;
+    else spans.push({ support, from: state.number, to: state.number });
+  }
+  return spans;
+}
+
+/** The step that comes nearest to, or farthest beyond, its tool's warp limit. */
+export function tightestStep({ findings }: FlowAssessment) {
+  const warps = findings.filter(({ rule, limit, figures }) => rule === 2 && limit && figures[0]);
+  const use = (finding: (typeof warps)[number]) =>
+    (finding.figures[0]?.value ?? 0) / (finding.limit?.value ?? Infinity);
+  return warps.reduce<(typeof warps)[number] | null>(
+    (most, next) => (!most || use(next) > use(most) ? next : most),
+    null,
+  );
+}
+
+/**
+ * The answer in plain words: one sentence on support, one on what decides. The first is what a technician needs, the second
+ * what an engineer asks next.
+ */
+export function answerSentences(flow: FlowInput, assessment: FlowAssessment): string[] {
+  const { verdict, findings } = assessment;
+  const blocking = findings.find(
+    ({ outcome, step, rule }) => outcome === verdict.outcome && step === verdict.step && rule === verdict.rule,
+  );
+  const support = supportSentence(flow, assessment);
+  if (verdict.outcome === "clear" || verdict.outcome === "caution") {
+    const tightest = tightestSentence(assessment);
+    return tightest ? [support, tightest] : [support];
+  }
+  return blocking
+    ? [support, `Step ${blocking.step}, ${flow.steps[blocking.step - 1]?.title ?? ""}: ${blocking.reason}`]
+    : [support];
+}
+
+function supportSentence(flow: FlowInput, { steps, verdict }: FlowAssessment): string {
+  const spans = supportSpans(steps).filter(({ support }) => support !== "bare");
+  const planned = verdict.outcome === "clear" || verdict.outcome === "caution";
+  const opening =
+    verdict.outcome === "clear" ? "Clear as planned: " : verdict.outcome === "caution" ? "Runs with cautions: " : "";
+  if (spans.length === 0) return finish(opening, planned ? "no step needs support" : "No step needs support");
+  const parts = spans.map(({ support, from, to }) => {
+    const title = flow.steps[from - 1]?.title.toLowerCase() ?? "";
+    return from === to
+      ? `${support} at step ${from}, ${title}`
+      : `${support} from step ${from}, ${title}, to step ${to}`;
+  });
+  const strongest = spans.some(({ support }) => supportRank(support) >= supportRank("none fits"));
+  return finish(opening, opening || strongest ? parts.join("; ") : `Needs ${parts.join("; ")}`);
+}
+
+const finish = (opening: string, rest: string) => `${opening}${rest}.`;
+
+function tightestSentence(assessment: FlowAssessment): string | null {
+  const tightest = tightestStep(assessment);
+  if (!tightest) return null;
+  return `Tightest: step ${tightest.step}, ${tightest.reason.charAt(0).toLowerCase()}${tightest.reason.slice(1)}`;
+}

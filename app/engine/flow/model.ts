@@ -1,0 +1,154 @@
+import type { Measured } from "../measured.ts";
+import type { Exposure, Holding, Side } from "../vocabulary.ts";
+
+/**
+ * What a flow is made of, complete in itself: names, values and provenance are copied in, so a stored assessment can be
+ * read for ever without the library it came from. SI units; temperatures in K.
+ *
+ * Left out in this version: incoming shape other than films, patterned lines, wafers of a lot, tape and clock limits.
+ */
+
+export const STEP_KINDS = [
+  "receive",
+  "measure",
+  "deposit",
+  "cure",
+  "anneal",
+  "pattern",
+  "plate",
+  "reflow",
+  "clean",
+  "edge trim",
+  "laminate tape",
+  "bond",
+  "grind",
+  "stress relief",
+  "polish",
+  "via reveal",
+  "back-side film",
+  "mount on frame",
+  "debond",
+  "dice",
+  "move",
+  "store",
+  "hold",
+] as const;
+export type StepKind = (typeof STEP_KINDS)[number];
+
+export const FILM_KINDS = ["metal", "polymer", "inorganic", "solder"] as const;
+export type FilmKind = (typeof FILM_KINDS)[number];
+
+/** A film material. `yieldStress` is that at 25 °C; only metals that yield have one. */
+export interface FilmInput {
+  id: string;
+  name: string;
+  kind: FilmKind;
+  youngsModulus: Measured;
+  poissonsRatio: Measured;
+  expansion: Measured;
+  yieldStress: Measured | null;
+  temperatureLimit: Measured | null;
+}
+
+/** A film put down by a step. `stress` at 25 °C on a full-thickness monitor held flat, tension positive. */
+export interface FilmAddition {
+  side: Side;
+  film: FilmInput;
+  thickness: Measured;
+  stress: Measured;
+  /** area fraction, 0 to 1 */
+  coverage: number;
+}
+
+export const CARRIER_MATERIALS = ["silicon", "glass"] as const;
+export type CarrierMaterial = (typeof CARRIER_MATERIALS)[number];
+
+/** A carrier. `expansion` null means silicon's own curve. */
+export interface CarrierInput {
+  id: string;
+  name: string;
+  material: CarrierMaterial;
+  thickness: Measured;
+  diameter: number;
+  youngsModulus: Measured;
+  poissonsRatio: Measured;
+  expansion: Measured | null;
+  temperatureLimit: Measured;
+}
+
+export const RELEASE_METHODS = [
+  "thermal slide",
+  "laser through glass",
+  "mechanical peel",
+  "laser through glass then peel",
+  "solvent through perforated carrier",
+] as const;
+export type ReleaseMethod = (typeof RELEASE_METHODS)[number];
+
+/**
+ * A temporary bonding material. `effectiveModulus` is the locked-in modulus that couples the pair, calibrated on measured
+ * pairs and far below the data sheet's. `softening` is the glass transition or softening point; `flows` is true for a
+ * thermoplastic, which flows above it, false for a cross-linked material, which does not.
+ */
+export interface BondingMaterialInput {
+  id: string;
+  name: string;
+  effectiveModulus: Measured;
+  poissonsRatio: Measured;
+  expansionBelow: Measured;
+  expansionAbove: Measured;
+  softening: Measured | null;
+  flows: boolean;
+  bondTemperature: Measured;
+  temperatureLimit: Measured;
+  release: ReleaseMethod;
+  releaseTemperature: Measured;
+}
+
+export const PEAK_HOLDINGS = ["free", "held"] as const;
+export type PeakHolding = (typeof PEAK_HOLDINGS)[number];
+
+/** A tool with its two warp limits; null where the wafer comes on a frame and no limit is given. */
+export interface EquipmentInput {
+  id: string;
+  name: string;
+  warpLimitEdgesUp: Measured | null;
+  warpLimitEdgesDown: Measured | null;
+  /** thinnest silicon it takes without support, m */
+  leastUnsupportedThickness: Measured | null;
+  /** whether the wafer is free while it is hot (boat, pins, belt) or held (vacuum, clamp, frame) */
+  atPeak: PeakHolding;
+  /** largest wafer or carrier diameter it takes, m */
+  largestDiameter: Measured;
+}
+
+export interface BondInput {
+  carrier: CarrierInput;
+  material: BondingMaterialInput;
+  thickness: Measured;
+}
+
+export interface StepInput {
+  kind: StepKind;
+  title: string;
+  peakTemperature: number;
+  /** minutes at peak kept in seconds; null when it does not matter */
+  holdTime: number | null;
+  equipment: EquipmentInput | null;
+  exposures: Exposure[];
+  planned: Holding;
+  /** remaining silicon after the step; null leaves it as it was */
+  siliconAfter: Measured | null;
+  adds: FilmAddition[];
+  removes: { side: Side; filmId: string; filmName: string }[];
+  edgeTrim: { width: Measured; depth: Measured } | null;
+  bond: BondInput | null;
+  /** force of the ground or polished back face per length, N/m, compression negative; null leaves it as it was */
+  groundFaceForce: Measured | null;
+}
+
+export interface FlowInput {
+  name: string;
+  wafer: { name: string; diameter: number; orientation: "100" | "111"; thickness: Measured };
+  steps: StepInput[];
+}

@@ -1,0 +1,69 @@
+import type { Layer } from "../laminate/layer.ts";
+import type { LaminateResult } from "../laminate/solve-laminate.ts";
+import { freeWaferShape, type FreeWaferShapeInput } from "../plate/free-wafer-shape.ts";
+import { siliconPlateConstants } from "../silicon/plane-constants.ts";
+import type { FaceUp, ShapeRegime, ShapeWord } from "../vocabulary.ts";
+import type { FlowInput } from "./model.ts";
+
+/** Shape of a wafer or pair that lies free, device side up sign (a sagitta has the sign of the curvature). */
+export interface LyingShape {
+  temperature: number;
+  /** curvature of the linear laminate, 1/m, positive for a bowl */
+  linearCurvature: number;
+  /** centre to rim along the more curved axis, m, positive for a bowl */
+  sagitta: number;
+  /** peak to valley, m */
+  warp: number;
+  regime: ShapeRegime;
+  /** load over the load at which it rolls about one axis */
+  stabilityRatio: number;
+  rollRadius: number | null;
+  /** what it was computed from: the laminate and the disc */
+  layers: Layer[];
+  disc: FreeWaferShapeInput;
+}
+
+/** Shape of a solved laminate as a free disc of the flow's wafer. */
+export function lyingShape(
+  wafer: FlowInput["wafer"],
+  layers: Layer[],
+  solution: LaminateResult,
+  temperature: number,
+  bonded: boolean,
+): LyingShape {
+  const { youngsModulus, poissonsRatio } = siliconPlateConstants(wafer.orientation);
+  const disc: FreeWaferShapeInput = {
+    radius: wafer.diameter / 2,
+    thickness: solution.effectiveThickness,
+    youngsModulus,
+    poissonsRatio,
+    linearCurvature: solution.curvature,
+    // The crystal's preferred axes matter for silicon alone; a pair is governed by its isotropic partner too.
+    crystal: bonded || wafer.orientation !== "100" ? undefined : "100",
+  };
+  const shape = freeWaferShape(disc);
+  return {
+    temperature,
+    linearCurvature: solution.curvature,
+    sagitta: shape.bowMajor,
+    warp: shape.warp,
+    regime: shape.regime,
+    stabilityRatio: shape.stabilityRatio,
+    rollRadius: shape.rollRadius,
+    layers,
+    disc,
+  };
+}
+
+/** Whether the rim lies above the centre on the tool: a bowl does with its device side up, a dome with its back side up. */
+export function edgesUp(shape: LyingShape, faceUp: FaceUp): boolean {
+  return shape.sagitta > 0 === (faceUp === "device side");
+}
+
+/** The one word for how it lies on the tool. */
+export function shapeWord(shape: LyingShape | null, faceUp: FaceUp, flatWithin: number): ShapeWord {
+  if (shape === null) return "held";
+  if (shape.regime === "curled") return "rolls up";
+  if (shape.warp <= flatWithin) return "flat";
+  return edgesUp(shape, faceUp) ? "edges up" : "edges down";
+}

@@ -1,0 +1,121 @@
+import { EngineInputError } from "../errors.ts";
+import type { Measured } from "../measured.ts";
+import type { FaceUp, Holding, Side } from "../vocabulary.ts";
+import { ROOM_TEMPERATURE } from "../laminate/layer.ts";
+import type { BondInput, FilmAddition, FlowInput, StepInput } from "./model.ts";
+
+/** A film as it is on the wafer, with what it has been through. */
+export interface FilmState {
+  addition: FilmAddition;
+  /** strain left by yielding, biaxial, tension positive */
+  plasticStrain: number;
+  /** hottest step so far, K */
+  hottest: number;
+}
+
+/** A bond as it is: what joins the pair, and the temperature at which it was made. */
+export interface BondState extends BondInput {
+  bondTemperature: number;
+}
+
+/** The wafer between two steps. Films are listed from the silicon outwards. */
+export interface WaferState {
+  silicon: Measured;
+  front: FilmState[];
+  back: FilmState[];
+  /** force per length of the ground or polished back face, N/m, compression negative */
+  groundFaceForce: number;
+  bond: BondState | null;
+  /** tape or frame that the wafer is on, if any */
+  mount: "grinding tape" | "film frame" | "edge ring" | null;
+  trim: { width: Measured; depth: Measured } | null;
+  ground: boolean;
+  diced: boolean;
+  holding: Holding;
+  faceUp: FaceUp;
+}
+
+/** The wafer before its first step: bare silicon, device side up. */
+export function initialState(flow: FlowInput): WaferState {
+  if (!(flow.wafer.thickness.value > 0))
+    throw new EngineInputError("wafer.thickness", "the silicon must have a thickness", "> 0 m");
+  return {
+    silicon: flow.wafer.thickness,
+    front: [],
+    back: [],
+    groundFaceForce: 0,
+    bond: null,
+    mount: null,
+    trim: null,
+    ground: false,
+    diced: false,
+    holding: "bare",
+    faceUp: "device side",
+  };
+}
+
+function add(films: FilmState[], side: Side, step: StepInput): FilmState[] {
+  const added = step.adds
+    .filter((addition) => addition.side === side)
+    .map((addition) => ({ addition, plasticStrain: 0, hottest: ROOM_TEMPERATURE }));
+  return [...films, ...added];
+}
+
+/** Takes off the outermost film of that material; one that is not there is left to the order rule. */
+function remove(films: FilmState[], side: Side, step: StepInput): FilmState[] {
+  let rest = films;
+  for (const removal of step.removes) {
+    if (removal.side !== side) continue;
+    const at = rest.findLastIndex((film) => film.addition.film.id === removal.filmId);
+    if (at >= 0) rest = rest.filter((_, index) => index !== at);
+  }
+  return rest;
+}
+
+function mountAfter(before: WaferState, step: StepInput): WaferState["mount"] {
+  if (step.kind === "laminate tape") return "grinding tape";
+  if (step.kind === "mount on frame") return step.planned === "edge ring" ? "edge ring" : "film frame";
+  if (step.planned === "bare" || step.planned === "thin-wafer gripper") return null;
+  return before.mount;
+}
+
+/** The face that is up once the step is planned as it is: back side up on grinding tape and on a carrier. */
+function faceUpAfter(step: StepInput, bonded: boolean): FaceUp {
+  return bonded || step.planned === "grinding tape" ? "back side" : "device side";
+}
+
+/**
+ * The wafer after a step has added, removed or changed what it states. What the step cannot do (debond what is not bonded,
+ * grind to more than there is) is left undone here and reported by the order rule.
+ * @throws EngineInputError when the remaining silicon is not positive
+ */
+export function applyStep(before: WaferState, step: StepInput, field: string): WaferState {
+  if (step.siliconAfter && !(step.siliconAfter.value > 0))
+    throw new EngineInputError(`${field}.siliconAfter`, "no silicon would be left after this step", "> 0 m");
+  const thinner = step.siliconAfter !== null && step.siliconAfter.value <= before.silicon.value;
+  const bond =
+    step.kind === "bond" && step.bond && !before.bond
+      ? { ...step.bond, bondTemperature: step.peakTemperature }
+      : step.kind === "debond"
+        ? null
+        : before.bond;
+  return {
+    silicon: thinner && step.siliconAfter ? step.siliconAfter : before.silicon,
+    // A seed that is stripped and left only under the lines is one removal and one addition.
+    front: add(remove(before.front, "front", step), "front", step),
+    back: add(remove(before.back, "back", step), "back", step),
+    groundFaceForce: step.groundFaceForce?.value ?? before.groundFaceForce,
+    bond,
+    mount: mountAfter(before, step),
+    trim: step.edgeTrim ?? before.trim,
+    ground: before.ground || step.kind === "grind",
+    diced: before.diced || step.kind === "dice",
+    holding: step.planned,
+    faceUp: faceUpAfter(step, bond !== null),
+  };
+}
+
+/** Films on both sides, outermost last. */
+export function allFilms(state: WaferState): FilmState[] {
+  return [...state.front, ...state.back];
+}

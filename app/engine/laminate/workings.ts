@@ -1,0 +1,46 @@
+import type { Working, WorkingLine } from "../working.ts";
+import { ROOM_TEMPERATURE, type Layer } from "./layer.ts";
+import { solveLaminate } from "./solve-laminate.ts";
+
+/** The curvature of `solveLaminate` as data: for each layer, bottom to top, what went into the sums. */
+export function laminateCurvatureWorking(
+  layersBottomToTop: readonly Layer[],
+  o: { temperature?: number } = {},
+): Working {
+  const solved = solveLaminate(layersBottomToTop, o);
+  const temperature: WorkingLine = {
+    symbol: "T",
+    meaning: "temperature",
+    value: o.temperature ?? ROOM_TEMPERATURE,
+    unit: "K",
+    temperaturePoint: true,
+  };
+  return {
+    equation: "laminate",
+    inputs: [temperature, ...layersBottomToTop.flatMap((layer, n) => layerLines(layer, n + 1, solved.freeStrain[n] ?? 0))],
+    result: { symbol: "κ", meaning: "curvature, bowl positive", value: solved.curvature, unit: "1/m" },
+    note: "Layers are counted from the bottom, device side on top.",
+  };
+}
+
+function layerLines(layer: Layer, position: number, freeStrain: number): WorkingLine[] {
+  const lines: WorkingLine[] = [
+    { symbol: `h_${position}`, meaning: `thickness of layer ${position}`, value: layer.thickness, unit: "m" },
+    {
+      symbol: `M_${position}`,
+      meaning: `biaxial modulus of layer ${position}`,
+      value: layer.youngsModulus / (1 - layer.poissonsRatio),
+      unit: "Pa",
+    },
+    { symbol: `e_${position}`, meaning: `free strain of layer ${position}`, value: freeStrain, unit: "1" },
+  ];
+  if (layer.coverage !== undefined) {
+    lines.push({
+      symbol: `f_${position}`,
+      meaning: `area fraction of layer ${position}`,
+      value: layer.coverage,
+      unit: "1",
+    });
+  }
+  return lines;
+}

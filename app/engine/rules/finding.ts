@@ -1,0 +1,66 @@
+import type { FlowInput, StepInput } from "../flow/model.ts";
+import type { StepState } from "../flow/walk.ts";
+import type { Outcome } from "../vocabulary.ts";
+import type { UnitSymbol, Working } from "../working.ts";
+import type { LimitKey, SiteLimits } from "./limits.ts";
+
+/** A number in a finding, in SI, with its working when there is one. */
+export interface Figure {
+  label: string;
+  value: number;
+  unit: UnitSymbol;
+  temperaturePoint?: boolean;
+  standardUncertainty?: number | null;
+  working?: Working | null;
+}
+
+/** What a figure was held against, and where that limit comes from. */
+export interface FindingLimit {
+  label: string;
+  value: number;
+  unit: UnitSymbol;
+  temperaturePoint?: boolean;
+  source: string;
+}
+
+/** One rule's outcome at one step. `step` counts from 1. */
+export interface Finding {
+  rule: number;
+  title: string;
+  step: number;
+  outcome: Outcome;
+  /** one sentence in plain words */
+  reason: string;
+  figures: Figure[];
+  limit: FindingLimit | null;
+  /** what would clear it; null when it is clear */
+  remedy: string | null;
+}
+
+/** Standard uncertainty of a step's sagittas, first order in the tolerances given, m. */
+export interface StepUncertainty {
+  atRoom: number | null;
+  atPeak: number | null;
+}
+
+export interface RuleContext {
+  flow: FlowInput;
+  limits: SiteLimits;
+  steps: StepState[];
+  uncertainty: StepUncertainty[];
+}
+
+/** A handling rule. `judge` looks at one step and returns what it finds, nothing when the rule has no say there. */
+export interface Rule {
+  number: number;
+  title: string;
+  /** what it asks, for the method page */
+  asks: string;
+  limits: LimitKey[];
+  judge(context: RuleContext, state: StepState): Finding[];
+}
+
+/** Name of a step in a sentence: 'step 12, Edge trim'. */
+export function stepName(state: { number: number; step: StepInput }): string {
+  return `step ${state.number}, ${state.step.title}`;
+}

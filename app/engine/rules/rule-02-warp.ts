@@ -1,0 +1,129 @@
+import { provenance } from "../measured.ts";
+import { edgesUp, type LyingShape } from "../flow/shape.ts";
+import type { StepState } from "../flow/walk.ts";
+import { standardBow } from "../stoney/bow.ts";
+import { formatQuantity, formatWithUncertainty } from "../units/format.ts";
+import type { FaceUp, Outcome } from "../vocabulary.ts";
+import { outcomeRank } from "../vocabulary.ts";
+import { againstUpperLimit } from "./against-limit.ts";
+import type { Finding, Rule, RuleContext } from "./finding.ts";
+import { shareBeyond } from "./share-beyond.ts";
+import { warpWorking } from "./warp-working.ts";
+
+const TITLE = "Warp on the tool";
+
+/** One moment at which the wafer lies on the tool with a shape of its own. */
+interface Moment {
+  when: "as loaded" | "after the step" | "free at peak";
+  shape: LyingShape;
+  faceUp: FaceUp;
+  uncertainty: number | null;
+}
+
+/** As it comes to the tool, as it leaves, and at peak where the tool leaves it free. */
+function moments({ steps, uncertainty }: RuleContext, state: StepState): Moment[] {
+  const previous = steps[state.number - 2];
+  const own = uncertainty[state.number - 1];
+  const found: Moment[] = [];
+  if (previous?.atRoom)
+    found.push({
+      when: "as loaded",
+      shape: previous.atRoom,
+      faceUp: previous.after.faceUp,
+      uncertainty: uncertainty[previous.number - 1]?.atRoom ?? null,
+    });
+  if (state.atRoom)
+    found.push({
+      when: "after the step",
+      shape: state.atRoom,
+      faceUp: state.after.faceUp,
+      uncertainty: own?.atRoom ?? null,
+    });
+  if (state.atPeak && state.step.equipment?.atPeak === "free")
+    found.push({
+      when: "free at peak",
+      shape: state.atPeak,
+      faceUp: state.after.faceUp,
+      uncertainty: own?.atPeak ?? null,
+    });
+  return found;
+}
+
+function judge(context: RuleContext, state: StepState): Finding[] {
+  const { equipment } = state.step;
+  const found = moments(context, state);
+  if (found.length === 0) return [];
+  if (!equipment)
+    return [
+      {
+        rule: 2,
+        title: TITLE,
+        step: state.number,
+        outcome: "cannot judge",
+        reason: "No tool is named for this step, so its warp limit is not known.",
+        figures: [],
+        limit: null,
+        remedy: "Choose the tool of this step.",
+      },
+    ];
+  const judged = found.flatMap((moment) => judgeMoment(context, state, moment) ?? []);
+  // Several moments of one step are one finding: the worst, at equal outcome the one nearest its limit.
+  judged.sort((a, b) => outcomeRank(b.outcome) - outcomeRank(a.outcome) || use(b) - use(a));
+  return judged.slice(0, 1);
+}
+
+const use = (finding: Finding) => (finding.figures[0]?.value ?? 0) / (finding.limit?.value ?? Infinity);
+
+function judgeMoment(context: RuleContext, state: StepState, moment: Moment): Finding | null {
+  const { equipment } = state.step;
+  if (!equipment) return null;
+  const { shape, faceUp, uncertainty } = moment;
+  const up = edgesUp(shape, faceUp);
+  const limit = up ? equipment.warpLimitEdgesUp : equipment.warpLimitEdgesDown;
+  if (!limit) return null;
+  const margin = limit.value * context.limits.warpMargin.value;
+  const outcome: Outcome = againstUpperLimit(shape.warp, limit.value, margin, "do not run");
+  const direction = up ? "edges up" : "edges down";
+  const lies =
+    shape.regime === "curled" && shape.rollRadius !== null
+      ? `rolls up, radius about ${formatQuantity(shape.rollRadius, "length", { unit: "m", significant: 2 })}, edges lift ${um(shape.warp)}`
+      : `${direction} ${uncertainty ? formatWithUncertainty(shape.warp, 2 * uncertainty, "length", { unit: "µm" }) : um(shape.warp)}`;
+  const share = shareBeyond(shape.warp, uncertainty, limit.value);
+  const when =
+    moment.when === "free at peak"
+      ? `at ${formatQuantity(shape.temperature, "temperature", { unit: "°C" })}, free`
+      : moment.when;
+  return {
+    rule: 2,
+    title: TITLE,
+    step: state.number,
+    outcome,
+    reason: `${capital(lies)} ${when}; ${equipment.name} takes ${um(limit.value)} ${direction}.${share ? ` ${share}` : ""}`,
+    figures: [
+      {
+        label: `Warp, ${when}`,
+        value: shape.warp,
+        unit: "m",
+        standardUncertainty: uncertainty,
+        working: warpWorking(shape),
+      },
+      { label: "Bow, device side up", value: standardBow(shape.sagitta), unit: "m", standardUncertainty: uncertainty },
+    ],
+    limit: { label: `${equipment.name}, ${direction}`, value: limit.value, unit: "m", source: provenance(limit) },
+    remedy:
+      outcome === "clear"
+        ? null
+        : `Lower the film force or leave more silicon at this step, choose a carrier that bows less, or a tool that takes more than ${um(shape.warp)}.`,
+  };
+}
+
+const um = (value: number) => formatQuantity(value, "length", { unit: "µm", decimals: 0 });
+const capital = (text: string) => text.charAt(0).toUpperCase() + text.slice(1);
+
+export const warpRule: Rule = {
+  number: 2,
+  title: TITLE,
+  asks: "Does the wafer or pair lie flat enough for the tool, as it is loaded, as it leaves, and at peak where the tool leaves it free, against the tool's limit for edges up and for edges down?",
+  limits: ["warpMargin", "flatWithin"],
+  judge,
+};

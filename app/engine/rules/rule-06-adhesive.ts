@@ -1,0 +1,99 @@
+import { provenance } from "../measured.ts";
+import type { StepState } from "../flow/walk.ts";
+import { formatQuantity } from "../units/format.ts";
+import type { Outcome } from "../vocabulary.ts";
+import { againstUpperLimit } from "./against-limit.ts";
+import type { Finding, Rule, RuleContext } from "./finding.ts";
+
+const TITLE = "Bonding material and temperature";
+
+const celsius = (kelvin: number) => formatQuantity(kelvin, "temperature", { unit: "°C", decimals: 0 });
+
+/** The bond that the step's heat acts on: the one it comes with, not the one that this step makes or has just let go. */
+function bondUnderHeat(state: StepState) {
+  return state.step.kind === "bond" || state.step.kind === "debond" ? null : state.before.bond;
+}
+
+function judge({ limits }: RuleContext, state: StepState): Finding[] {
+  const bond = bondUnderHeat(state);
+  if (!bond) return [];
+  const { material } = bond;
+  const peak = state.step.peakTemperature;
+  const margin = limits.adhesiveMargin.value;
+  const figures: Finding["figures"] = [
+    { label: "Peak temperature", value: peak, unit: "K", temperaturePoint: true },
+    { label: "Margin asked below the limit", value: margin, unit: "K" },
+  ];
+  if (material.softening)
+    figures.push({ label: "Softening point", value: material.softening.value, unit: "K", temperaturePoint: true });
+  const make = (outcome: Outcome, reason: string, remedy: string | null): Finding => ({
+    rule: 6,
+    title: TITLE,
+    step: state.number,
+    outcome,
+    reason,
+    figures,
+    limit: {
+      label: `${material.name}, temperature limit`,
+      value: material.temperatureLimit.value,
+      unit: "K",
+      temperaturePoint: true,
+      source: provenance(material.temperatureLimit),
+    },
+    remedy,
+  });
+  const findings = [againstTemperatureLimit(peak, material.name, material.temperatureLimit.value, margin, make)];
+  if (material.softening && peak >= material.softening.value) findings.push(aboveSoftening(state, material, make));
+  return findings;
+}
+
+type MakeFinding = (outcome: Outcome, reason: string, remedy: string | null) => Finding;
+
+function againstTemperatureLimit(
+  peak: number,
+  name: string,
+  limit: number,
+  margin: number,
+  make: MakeFinding,
+): Finding {
+  const outcome = againstUpperLimit(peak, limit, margin, "do not run");
+  const figures = `${celsius(peak)} against the ${celsius(limit)} that ${name} takes`;
+  if (outcome === "clear") return make("clear", `${figures}.`, null);
+  const remedy = `Lower the peak to less than ${celsius(limit - margin)}, or bond with a material that takes more.`;
+  if (outcome === "caution")
+    return make(
+      "caution",
+      `${figures}: within its margin of ${formatQuantity(margin, "temperatureDifference", { unit: "K" })}.`,
+      remedy,
+    );
+  return make("do not run", `${figures}.`, remedy);
+}
+
+function aboveSoftening(
+  state: StepState,
+  material: NonNullable<StepState["before"]["bond"]>["material"],
+  make: MakeFinding,
+): Finding {
+  const peak = state.step.peakTemperature;
+  const above = `${celsius(peak)} reaches the softening point of ${material.name}, ${celsius(material.softening?.value ?? peak)}`;
+  if (!material.flows) return make("clear", `${above}: it is cross-linked, stays coupled and does not flow.`, null);
+  if (state.step.exposures.includes("vacuum"))
+    return make(
+      "do not run",
+      `${above}: it flows, and in vacuum the thin wafer blisters or floats.`,
+      "Keep vacuum steps below the softening point, or bond with a cross-linked material.",
+    );
+  return make(
+    "caution",
+    `${above}: it flows, and the pair can slide until it cools.`,
+    "Keep the step below the softening point, or bond with a cross-linked material.",
+  );
+}
+
+export const adhesiveRule: Rule = {
+  number: 6,
+  title: TITLE,
+  asks: "Does the bonding material stay below its temperature limit with its margin, and below the point where it flows, at every step between bond and debond?",
+  limits: ["adhesiveMargin"],
+  judge,
+};

@@ -1,0 +1,201 @@
+import type { StepState } from "../flow/walk.ts";
+import { allFilms } from "../flow/state.ts";
+import { formatQuantity } from "../units/format.ts";
+import type { Finding, Rule, RuleContext } from "./finding.ts";
+
+const TITLE = "Order of the steps";
+
+interface Fault {
+  reason: string;
+  remedy: string;
+}
+
+const um = (value: number) => formatQuantity(value, "length", { unit: "µm" });
+const mm = (value: number) => formatQuantity(value, "length", { unit: "mm" });
+
+/** One thing that an order of steps can get wrong; null when this step does not. */
+type Check = (state: StepState, context: RuleContext) => Fault | null;
+
+const growsSilicon: Check = ({ step, before }) =>
+  step.siliconAfter && step.siliconAfter.value > before.silicon.value
+    ? {
+        reason: `It should leave ${um(step.siliconAfter.value)} of silicon, but only ${um(before.silicon.value)} are there.`,
+        remedy: "Give the silicon that remains after the step, at most what is there before it.",
+      }
+    : null;
+
+const debondsUnbonded: Check = ({ step, before }) =>
+  step.kind === "debond" && !before.bond
+    ? {
+        reason: "There is nothing to debond: the wafer is not bonded here.",
+        remedy: "Add the bond before, or leave the debond out.",
+      }
+    : null;
+
+const bondsTwice: Check = ({ step, before }) =>
+  step.kind === "bond" && before.bond
+    ? {
+        reason: `It is already bonded to ${before.bond.carrier.name}.`,
+        remedy: "Debond first.",
+      }
+    : null;
+
+const bondsToNothing: Check = ({ step }) =>
+  step.kind === "bond" && !step.bond
+    ? { reason: "No carrier and bonding material are chosen.", remedy: "Choose both at this step." }
+    : null;
+
+const plannedCarrierMissing: Check = ({ step, after }) =>
+  step.planned === "carrier" && !after.bond
+    ? {
+        reason: "A carrier is planned, but the wafer is not bonded to one here.",
+        remedy: "Add the bond before this step, or plan another support.",
+      }
+    : null;
+
+const leavesCarrierUnnoticed: Check = ({ step, after }) =>
+  after.bond && step.planned !== "carrier"
+    ? {
+        reason: `It is still bonded to ${after.bond.carrier.name}, but ${step.planned} is planned.`,
+        remedy: "Plan the carrier here, or debond before this step.",
+      }
+    : null;
+
+const plannedMountMissing: Check = ({ step, after }) =>
+  (step.planned === "grinding tape" || step.planned === "film frame" || step.planned === "edge ring") &&
+  after.mount !== step.planned &&
+  !after.bond
+    ? {
+        reason: `A ${step.planned} is planned, but the wafer was not put on one.`,
+        remedy: step.planned === "grinding tape" ? "Laminate the tape before this step." : "Mount it before this step.",
+      }
+    : null;
+
+const dicesUnmounted: Check = ({ step, before }) =>
+  step.kind === "dice" && before.mount !== "film frame" && before.mount !== "edge ring"
+    ? {
+        reason: "It would be diced without a frame: the dies would be loose.",
+        remedy: "Mount it on a film frame before dicing.",
+      }
+    : null;
+
+const worksAfterDicing: Check = ({ step, before }) =>
+  before.diced && ["grind", "bond", "pattern", "plate", "deposit", "cure"].includes(step.kind)
+    ? { reason: "The wafer is already diced here.", remedy: "Move this step before dicing." }
+    : null;
+
+const heatsTape: Check = ({ step, before, after }, { limits }) => {
+  const mount = after.mount ?? before.mount;
+  if (!mount || mount === "edge ring" || after.bond) return null;
+  const limit = limits.tapeTemperature.value;
+  const hot = step.peakTemperature > limit;
+  const vacuum = step.exposures.includes("vacuum") || step.exposures.includes("plasma");
+  if (!hot && !vacuum) return null;
+  const at = formatQuantity(step.peakTemperature, "temperature", { unit: "°C", decimals: 0 });
+  const most = formatQuantity(limit, "temperature", { unit: "°C", decimals: 0 });
+  return {
+    reason: hot
+      ? `It is on ${mount}, which takes ${most}; the step reaches ${at}.`
+      : `It is on ${mount}, which does not go into vacuum or plasma.`,
+    remedy: "Take the tape off before heat and vacuum, or plan a carrier for this step.",
+  };
+};
+
+const trimsAfterGrinding: Check = ({ step, before }) =>
+  step.kind === "edge trim" && before.ground
+    ? {
+        reason: "The edge is trimmed after grinding: the knife edge is already there.",
+        remedy: "Trim the edge before the grind.",
+      }
+    : null;
+
+const removesWhatIsNotThere: Check = ({ step, before }) => {
+  const missing = step.removes.find(
+    ({ side, filmId }) =>
+      !allFilms(before).some(({ addition }) => addition.side === side && addition.film.id === filmId),
+  );
+  return missing
+    ? {
+        reason: `It removes ${missing.filmName} from the ${missing.side} side, where there is none.`,
+        remedy: "Choose a film that is on that side at this step.",
+      }
+    : null;
+};
+
+const doesNotFitTool: Check = ({ step, after }, { flow }) => {
+  if (!step.equipment) return null;
+  const most = step.equipment.largestDiameter.value;
+  const carrier = after.bond?.carrier;
+  if (carrier && carrier.diameter > most)
+    return {
+      reason: `${carrier.name} measures ${mm(carrier.diameter)}; ${step.equipment.name} takes ${mm(most)}.`,
+      remedy: "Choose a carrier or a tool of the same size.",
+    };
+  if (flow.wafer.diameter > most)
+    return {
+      reason: `The wafer measures ${mm(flow.wafer.diameter)}; ${step.equipment.name} takes ${mm(most)}.`,
+      remedy: "Choose a tool for this wafer size.",
+    };
+  return null;
+};
+
+const carrierTooSmall: Check = ({ step }, { flow }) =>
+  step.kind === "bond" && step.bond && step.bond.carrier.diameter < flow.wafer.diameter
+    ? {
+        reason: `${step.bond.carrier.name} measures ${mm(step.bond.carrier.diameter)}, less than the ${mm(flow.wafer.diameter)} wafer: the edge would hang free.`,
+        remedy: "Choose a carrier at least as large as the wafer.",
+      }
+    : null;
+
+const CHECKS: Check[] = [
+  growsSilicon,
+  bondsToNothing,
+  bondsTwice,
+  debondsUnbonded,
+  carrierTooSmall,
+  doesNotFitTool,
+  plannedCarrierMissing,
+  leavesCarrierUnnoticed,
+  plannedMountMissing,
+  trimsAfterGrinding,
+  heatsTape,
+  removesWhatIsNotThere,
+  dicesUnmounted,
+  worksAfterDicing,
+];
+
+/** After a debond the next wet step must take the adhesive off before anything else is done to that face. */
+function cleanAfterDebond({ steps }: RuleContext, state: StepState): Finding | null {
+  if (state.step.kind !== "debond" || !state.before.bond) return null;
+  const later = steps.slice(state.number);
+  const next = later.find(({ step }) => !["move", "store", "hold", "measure"].includes(step.kind));
+  if (next?.step.kind === "clean") return null;
+  return finding(
+    state,
+    "caution",
+    "No cleaning step follows the debond: the adhesive stays on the device side.",
+    "Add a clean after the debond.",
+  );
+}
+
+function finding(state: StepState, outcome: Finding["outcome"], reason: string, remedy: string | null): Finding {
+  return { rule: 12, title: TITLE, step: state.number, outcome, reason, figures: [], limit: null, remedy };
+}
+
+function judge(context: RuleContext, state: StepState): Finding[] {
+  const faults = CHECKS.flatMap((check) => check(state, context) ?? []);
+  const findings = faults.map(({ reason, remedy }) => finding(state, "do not run", reason, remedy));
+  const clean = cleanAfterDebond(context, state);
+  if (clean) findings.push(clean);
+  if (findings.length === 0 && ["debond", "dice", "bond"].includes(state.step.kind))
+    findings.push(finding(state, "clear", "In order: what it needs was done before.", null));
+  return findings;
+}
+
+export const orderRule: Rule = {
+  number: 12,
+  title: TITLE,
+  asks: "Can the steps be done in this order: nothing below zero, nothing unmounted diced, debond of what is bonded, clean after debond, tape off before heat or vacuum, trim before grind, and does the wafer or its carrier fit the tool?",
+  limits: ["tapeTemperature"],
+  judge,
+};

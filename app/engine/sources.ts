@@ -1,0 +1,230 @@
+/**
+ * Bibliography. Every constant and equation of the engine names an entry by its key.
+ *
+ * `basis` says how far the entry was consulted: the text itself, only its abstract, or knowledge of it from memory. Facts of
+ * the trade without a publication are `common practice, no source`; results worked out for this program are `own derivation`
+ * (on paper, checked numerically) or `own computation` (numerical solution, described in `place`).
+ */
+export type SourceBasis =
+  | "read"
+  | "abstract read"
+  | "from memory of the named publication"
+  | "common practice, no source"
+  | "own derivation"
+  | "own computation";
+
+export interface Source {
+  author: string;
+  title: string;
+  year: number | null;
+  /** Journal with volume and page, publisher, or institution; never an access address. */
+  place: string;
+  basis: SourceBasis;
+}
+
+const memory = "from memory of the named publication";
+
+export const SOURCES = {
+  "stoney-1909": {
+    author: "G. G. Stoney",
+    title: "The tension of metallic films deposited by electrolysis",
+    year: 1909,
+    place: "Proceedings of the Royal Society of London A 82, page 172",
+    basis: memory,
+  },
+  "feng-huang-rosakis-2007": {
+    author: "X. Feng, Y. Huang, A. J. Rosakis",
+    title: "On the Stoney formula for a thin film/substrate system with nonuniform substrate thickness",
+    year: 2007,
+    place: "Journal of Applied Mechanics 74, page 1276, equation (1)",
+    basis: "read",
+  },
+  "cheung-ee143-2010": {
+    author: "N. Cheung",
+    title: "EE143 Microfabrication Technology, homework 12 with solutions",
+    year: 2010,
+    place: "University of California, Berkeley",
+    basis: "read",
+  },
+  "freund-suresh-2003": {
+    author: "L. B. Freund, S. Suresh",
+    title: "Thin Film Materials: Stress, Defect Formation and Surface Evolution",
+    year: 2003,
+    place: "Cambridge University Press, chapter 2",
+    basis: memory,
+  },
+  "freund-floro-chason-1999": {
+    author: "L. B. Freund, J. A. Floro, E. Chason",
+    title:
+      "Extensions of the Stoney formula for substrate curvature to configurations with thin substrates or large deformations",
+    year: 1999,
+    place: "Applied Physics Letters 74, page 1987",
+    basis: memory,
+  },
+  "freund-2000": {
+    author: "L. B. Freund",
+    title: "Substrate curvature due to thin film mismatch strain in the nonlinear deformation range",
+    year: 2000,
+    place: "Journal of the Mechanics and Physics of Solids 48, page 1159",
+    basis: memory,
+  },
+  "timoshenko-1925": {
+    author: "S. Timoshenko",
+    title: "Analysis of bi-metal thermostats",
+    year: 1925,
+    place: "Journal of the Optical Society of America 11, page 233",
+    basis: memory,
+  },
+  "townsend-barnett-brunner-1987": {
+    author: "P. H. Townsend, D. M. Barnett, T. A. Brunner",
+    title:
+      "Elastic relationships in layered composite media with approximation for the case of thin films on a thick substrate",
+    year: 1987,
+    place: "Journal of Applied Physics 62, page 4438",
+    basis: memory,
+  },
+  "hsueh-2002": {
+    author: "C.-H. Hsueh",
+    title: "Modeling of elastic deformation of multilayers due to residual stresses and external bending",
+    year: 2002,
+    place: "Journal of Applied Physics 91, page 9652",
+    basis: memory,
+  },
+  "hsueh-lee-chuang-2003": {
+    author: "C.-H. Hsueh, S. Lee, T.-J. Chuang",
+    title: "An alternative method of solving multilayer bending problems",
+    year: 2003,
+    place: "Journal of Applied Mechanics 70, page 151",
+    basis: "abstract read",
+  },
+  "okada-tokumaru-1984": {
+    author: "Y. Okada, Y. Tokumaru",
+    title: "Precise determination of lattice parameter and thermal expansion coefficient of silicon between 300 and 1500 K",
+    year: 1984,
+    place: "Journal of Applied Physics 56, page 314",
+    basis: "abstract read",
+  },
+  "silicon-properties-note": {
+    author: "technical note of a wafer maker",
+    title: "Basic Mechanical and Thermal Properties of Silicon",
+    year: null,
+    place: "elastic constants and their temperature coefficients, reference 6 there; recommended expansion at 25 °C",
+    basis: "read",
+  },
+  "hopcroft-nix-kenny-2010": {
+    author: "M. A. Hopcroft, W. D. Nix, T. W. Kenny",
+    title: "What is the Young's modulus of silicon?",
+    year: 2010,
+    place: "Journal of Microelectromechanical Systems 19, page 229",
+    basis: memory,
+  },
+  "brantley-1973": {
+    author: "W. A. Brantley",
+    title: "Calculated elastic constants for stress problems associated with semiconductor devices",
+    year: 1973,
+    place: "Journal of Applied Physics 44, page 534",
+    basis: memory,
+  },
+  "mems-talk-elastic-constants": {
+    author: "K. Williams, G. C. Johnson",
+    title: "Elastic constants of silicon, letters quoting Brantley 1973",
+    year: 1995,
+    place: "MEMS-Talk mailing list, 1995 to 2001",
+    basis: "read",
+  },
+  "cubic-layer-exercise": {
+    author: "textbook exercise, author not given",
+    title: "Biaxial modulus of a zinc-blende epitaxial layer of orientation (hkl)",
+    year: null,
+    place: "exercise statement",
+    basis: "read",
+  },
+  "silicon-density": {
+    author: "CODATA and handbooks",
+    title: "Density of silicon at 25 °C",
+    year: null,
+    place: "2329 kg/m3",
+    basis: memory,
+  },
+  "semi-mf534": {
+    author: "SEMI",
+    title: "MF534, Test Method for Bow of Silicon Wafers",
+    year: null,
+    place: "SEMI, after ASTM F534",
+    basis: memory,
+  },
+  "semi-mf1390": {
+    author: "SEMI",
+    title: "MF1390, Test Method for Measuring Bow and Warp on Silicon Wafers by Automated Noncontact Scanning",
+    year: null,
+    place: "SEMI, after ASTM F1390",
+    basis: "abstract read",
+  },
+  "marks-hassan-cheong-2014": {
+    author: "M. R. Marks, Z. Hassan, K. Y. Cheong",
+    title: "Characterization methods for ultrathin wafer and die quality: a review",
+    year: 2014,
+    place: "IEEE Transactions on Components, Packaging and Manufacturing Technology 4, page 2042",
+    basis: "read",
+  },
+  "masters-salamon-1993": {
+    author: "C. B. Masters, N. J. Salamon",
+    title: "Geometrically nonlinear stress-deflection relations for thin film/substrate systems",
+    year: 1993,
+    place: "International Journal of Engineering Science 31, page 915",
+    basis: memory,
+  },
+  "finot-1997": {
+    author: "M. Finot, I. A. Blech, S. Suresh, H. Fujimoto",
+    title: "Large deformation and geometric instability of substrates with thin-film deposits",
+    year: 1997,
+    place: "Journal of Applied Physics 81, page 3457",
+    basis: memory,
+  },
+  "gum-2008": {
+    author: "Joint Committee for Guides in Metrology",
+    title: "JCGM 100:2008, Guide to the expression of uncertainty in measurement",
+    year: 2008,
+    place: "JCGM, clauses 5.1.2 and 7.2.6",
+    basis: "read",
+  },
+  "plate-perturbation": {
+    author: "this program",
+    title: "Free circular plate under uniform moments: first correction of von Karman's theory in closed form",
+    year: null,
+    place: "third order in the curvature; compared with the numerical solution below",
+    basis: "own derivation",
+  },
+  "plate-von-karman": {
+    author: "this program",
+    title: "Free circular plate under uniform moments: von Karman's energy minimised in polynomials",
+    year: null,
+    place:
+      "degree 12 to 24, even in both axes, with the membrane forces solved in the same degree; converged to 1 part in 10 000 up to 20 times the critical load",
+    basis: "own computation",
+  },
+  "eigenstrain-convention": {
+    author: "this program",
+    title: "Film stress kept as a free strain quoted on a flat, rigid, thick substrate",
+    year: null,
+    place: "product convention; other reference states differ by terms of the order of the film's share of the stiffness",
+    basis: "own derivation",
+  },
+  "common-practice": {
+    author: "the trade",
+    title: "Common practice in wafer handling",
+    year: null,
+    place: "no publication; a site sets its own numbers",
+    basis: "common practice, no source",
+  },
+} as const satisfies Record<string, Source>;
+
+/** Key of a bibliography entry. */
+export type SourceId = keyof typeof SOURCES;
+
+/** One entry as a reader should see it: author, title, place, year, and how far it was consulted. */
+export function citation(id: SourceId): string {
+  const source: Source = SOURCES[id];
+  const year = source.year === null ? "" : ` (${source.year})`;
+  return `${source.author}: ${source.title}. ${source.place}${year}. Basis: ${source.basis}.`;
+}

@@ -1,0 +1,68 @@
+/** The words of the product, one meaning each. Screens, sheets, rules and stored results all use these and no others. */
+
+/** What a step needs to hold the wafer, weakest first. `none fits` means that no support makes the step possible. */
+export const SUPPORT_CLASSES = ["bare", "thin-wafer gripper", "tape or ring", "carrier", "none fits"] as const;
+export type SupportClass = (typeof SUPPORT_CLASSES)[number];
+
+/** What is planned to hold the wafer at a step. */
+export const HOLDINGS = ["bare", "thin-wafer gripper", "grinding tape", "film frame", "edge ring", "carrier"] as const;
+export type Holding = (typeof HOLDINGS)[number];
+
+/** The support class that a planned holding gives. */
+export function supportClassOf(holding: Holding): SupportClass {
+  switch (holding) {
+    case "bare":
+    case "thin-wafer gripper":
+    case "carrier":
+      return holding;
+    case "grinding tape":
+    case "film frame":
+    case "edge ring":
+      return "tape or ring";
+  }
+}
+
+/** Rank of a support class: a planned class meets a required one when its rank is at least as high. */
+export function supportRank(support: SupportClass): number {
+  return SUPPORT_CLASSES.indexOf(support);
+}
+
+/** Outcome of one rule at one step, mildest first; `cannot judge` blocks release like `do not run`. */
+export const OUTCOMES = ["clear", "caution", "needs support", "cannot judge", "do not run"] as const;
+export type Outcome = (typeof OUTCOMES)[number];
+
+/** Rank of an outcome: the verdict of an assessment is its highest-ranked finding. */
+export function outcomeRank(outcome: Outcome): number {
+  return OUTCOMES.indexOf(outcome);
+}
+
+/** Where a value comes from; `assumed` stays visible all the way to the sheet. */
+export const SOURCE_KINDS = ["measured here", "supplier", "handbook", "assumed"] as const;
+export type SourceKind = (typeof SOURCE_KINDS)[number];
+
+/** How the wafer lies on the tool. The words are as loaded, not device side up. */
+export const SHAPE_WORDS = ["flat", "edges up", "edges down", "saddle", "rolls up", "held"] as const;
+export type ShapeWord = (typeof SHAPE_WORDS)[number];
+
+/** Which face is up on the tool: the pair lies carrier down from bond to debond, so its back side is up. */
+export type FaceUp = "device side" | "back side";
+
+/** Regime of a free wafer's shape: small bow, bow beyond the linear range, rolled about one axis. */
+export type ShapeRegime = "linear" | "nonlinear" | "curled";
+
+/** Which side of the silicon a film is on. `front` is the device side. */
+export type Side = "front" | "back";
+
+/** Conditions that a step exposes the wafer, its bond and its tape to. */
+export const EXPOSURES = [
+  "vacuum",
+  "plasma",
+  "solvent",
+  "acid",
+  "base",
+  "water",
+  "flux",
+  "nitrogen",
+  "ultraviolet light",
+] as const;
+export type Exposure = (typeof EXPOSURES)[number];

@@ -1,0 +1,55 @@
+import { isRouteErrorResponse, Links, Meta, Outlet, Scripts, ScrollRestoration, useRouteLoaderData } from "react-router";
+import stylesheet from "./app.css?url";
+import { ErrorPage } from "./components/layout/ErrorPage.tsx";
+import { originCheck } from "./middleware/origin-check.server.ts";
+import { requestLog } from "./middleware/request-log.server.ts";
+import { securityHeaders } from "./middleware/security-headers.server.ts";
+import { session } from "./middleware/session.server.ts";
+import { nonceContext } from "./server/contexts.server.ts";
+import type { Route } from "./+types/root";
+
+export const middleware: Route.MiddlewareFunction[] = [requestLog, securityHeaders, originCheck, session];
+
+export const links: Route.LinksFunction = () => [
+  { rel: "stylesheet", href: stylesheet },
+  { rel: "icon", href: "/mark.svg", type: "image/svg+xml" },
+];
+
+export function loader({ context }: Route.LoaderArgs) {
+  return { nonce: context.get(nonceContext) };
+}
+
+/** The nonce belongs to the page that was served: a later navigation must not replace it. */
+export const shouldRevalidate = () => false;
+
+export function Layout({ children }: { children: React.ReactNode }) {
+  const nonce = useRouteLoaderData<typeof loader>("root")?.nonce;
+  return (
+    <html lang="en">
+      <head>
+        <meta charSet="utf-8" />
+        <meta name="viewport" content="width=device-width, initial-scale=1" />
+        <meta name="color-scheme" content="light dark" />
+        <Meta />
+        <Links nonce={nonce} />
+      </head>
+      <body>
+        {children}
+        <ScrollRestoration nonce={nonce} />
+        <Scripts nonce={nonce} />
+      </body>
+    </html>
+  );
+}
+
+export default function App() {
+  return <Outlet />;
+}
+
+export function ErrorBoundary({ error }: Route.ErrorBoundaryProps) {
+  return (
+    <main className="mx-auto max-w-page p-6">
+      <ErrorPage status={isRouteErrorResponse(error) ? error.status : 500} error={error} />
+    </main>
+  );
+}

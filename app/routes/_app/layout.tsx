@@ -1,0 +1,40 @@
+import { isRouteErrorResponse, Outlet } from "react-router";
+import { ErrorPage } from "#app/components/layout/ErrorPage.tsx";
+import { Footer } from "#app/components/layout/Footer.tsx";
+import { TopBar } from "#app/components/layout/TopBar.tsx";
+import { roleInWords } from "#app/policies/role-words.ts";
+import { placesFor } from "#app/policies/places.ts";
+import { signedIn } from "#app/middleware/signed-in.server.ts";
+import { scopeOf } from "#app/server/contexts.server.ts";
+import type { Route } from "./+types/layout";
+
+export const middleware: Route.MiddlewareFunction[] = [signedIn];
+
+export function loader({ context }: Route.LoaderArgs) {
+  const { actor } = scopeOf(context);
+  return { person: { name: actor.name, role: roleInWords(actor) }, places: placesFor(actor) };
+}
+
+export default function AppLayout({ loaderData }: Route.ComponentProps) {
+  return (
+    <>
+      <TopBar person={loaderData.person} places={loaderData.places} />
+      <main id="main" className="mx-auto max-w-page px-4 pb-6 tablet:px-6" tabIndex={-1}>
+        <Outlet />
+      </main>
+      <Footer />
+    </>
+  );
+}
+
+/** A refusal inside keeps the frame of the application, so the way out is where it always is. */
+export function ErrorBoundary({ error, loaderData }: Route.ErrorBoundaryProps) {
+  return (
+    <>
+      {loaderData && <TopBar person={loaderData.person} places={loaderData.places} />}
+      <main id="main" className="mx-auto max-w-page px-4 py-6 tablet:px-6">
+        <ErrorPage status={isRouteErrorResponse(error) ? error.status : 500} error={error} />
+      </main>
+    </>
+  );
+}

@@ -1,0 +1,2 @@
+export type ScanParameters = object;
+export type ScanResult = object;

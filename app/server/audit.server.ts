@@ -1,0 +1,102 @@
+import { ChangeSetType, type EntityManager, type EventSubscriber, type FlushEventArgs } from "@mikro-orm/core";
+import { randomUUID } from "node:crypto";
+import { AuditEvent } from "#app/db/entities/audit-event.ts";
+
+interface AuditScope {
+  personId: string | null;
+  requestId: string;
+}
+
+const scopes = new WeakMap<object, AuditScope>();
+
+/** Tells the audit trail who is behind the changes that this manager will flush. */
+export function noteScope(em: EntityManager, scope: AuditScope): void {
+  scopes.set(em, scope);
+}
+
+/** Records whose every change is noted, with the words for them. What is not listed leaves no trail of its own. */
+const SUBJECTS: Record<string, string> = {
+  Person: "person",
+  Program: "program",
+  Membership: "membership",
+  Credential: "password",
+  Film: "film",
+  Silicon: "silicon",
+  Carrier: "carrier",
+  BondingMaterial: "bonding material",
+  Equipment: "equipment",
+  SiteLimit: "limit",
+  Stack: "stack",
+  StackLayer: "stack layer",
+  Flow: "flow",
+  FlowStep: "flow step",
+  FlowStepFilm: "flow step film",
+  Assessment: "assessment",
+  ScanFile: "scan file",
+  Scan: "scan",
+};
+
+/** Columns that say nothing to a reader, or that must not be copied. */
+const LEFT_OUT = new Set([
+  "id",
+  "version",
+  "createdAt",
+  "updatedAt",
+  "createdBy",
+  "updatedBy",
+  "passwordHash",
+  "bytes",
+  "input",
+  "result",
+]);
+
+type Plain = Record<string, unknown>;
+
+const idOf = (value: unknown): unknown =>
+  typeof value === "object" && value !== null && "id" in value ? (value as { id: unknown }).id : value;
+
+/**
+ * Writes one audit event per changed field, in the same flush and so in the same transaction as the change: a change without
+ * its event cannot be committed.
+ */
+export class AuditSubscriber implements EventSubscriber {
+  async onFlush({ em, uow }: FlushEventArgs): Promise<void> {
+    const scope = scopes.get(em);
+    for (const change of [...uow.getChangeSets()]) {
+      const subject = SUBJECTS[change.meta.className];
+      if (!subject) continue;
+      if (!scope) throw new Error(`A ${subject} was changed outside inScope.`);
+      const entity = change.entity as Plain;
+      const program = change.meta.className === "Program" ? entity["id"] : idOf(entity["program"]);
+      const base = {
+        at: new Date(),
+        actorId: scope.personId,
+        programId: (program as string | undefined) ?? null,
+        subject,
+        subjectId: entity["id"] as string,
+        requestId: scope.requestId,
+      };
+      const write = (event: Plain) =>
+        uow.computeChangeSet(
+          em.create(AuditEvent, { id: randomUUID(), field: null, from: null, to: null, ...base, ...event } as never),
+        );
+      if (change.type === ChangeSetType.DELETE || change.type === ChangeSetType.DELETE_EARLY) {
+        write({ action: "removed", from: summary(change.originalEntity as Plain | undefined) });
+        continue;
+      }
+      if (change.type === ChangeSetType.CREATE) {
+        write({ action: "created", to: summary(change.payload as Plain) });
+        continue;
+      }
+      const before = (change.originalEntity ?? {}) as Plain;
+      for (const [field, to] of Object.entries(change.payload as Plain))
+        if (!LEFT_OUT.has(field)) write({ action: "changed", field, from: before[field] ?? null, to: to ?? null });
+        else if (field === "passwordHash") write({ action: "changed", field });
+    }
+  }
+}
+
+function summary(record: Plain | undefined): Plain | null {
+  if (!record) return null;
+  return Object.fromEntries(Object.entries(record).filter(([field]) => !LEFT_OUT.has(field)));
+}

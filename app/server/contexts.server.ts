@@ -1,0 +1,18 @@
+import { createContext, type RouterContextProvider } from "react-router";
+import type { Actor } from "#app/policies/roles.ts";
+import type { ActorScope } from "./scope.server.ts";
+
+/** Set by middleware for everything below it. */
+export const requestIdContext = createContext<string>("");
+export const nonceContext = createContext<string>("");
+export const actorContext = createContext<Actor | null>(null);
+
+/**
+ * The scope of a request that needs a signed-in person. The session middleware has already sent everybody else away, so a
+ * missing actor here is a route outside the signed-in layout.
+ */
+export function scopeOf(context: Readonly<RouterContextProvider>): ActorScope {
+  const actor = context.get(actorContext);
+  if (!actor) throw new Error("This route is not behind the signed-in layout.");
+  return { actor, requestId: context.get(requestIdContext) };
+}

@@ -1,0 +1,29 @@
+import { z } from "zod";
+
+const schema = z.object({
+  NODE_ENV: z.enum(["production", "development", "test"]).default("production"),
+  DATABASE_URL: z.url({ protocol: /^postgres(ql)?$/ }),
+  /** comma-separated origins that may post forms besides the server's own, for a proxy in front */
+  ALLOWED_ORIGINS: z
+    .string()
+    .default("")
+    .transform((text) =>
+      text
+        .split(",")
+        .map((origin) => origin.trim())
+        .filter(Boolean),
+    ),
+  LOG_LEVEL: z.enum(["debug", "info", "warn", "error", "silent"]).default("info"),
+});
+
+export type Environment = z.infer<typeof schema>;
+
+function parseEnvironment(): Environment {
+  const parsed = schema.safeParse(process.env);
+  if (parsed.success) return parsed.data;
+  const faults = parsed.error.issues.map(({ path, message }) => `${path.join(".")}: ${message}`).join("; ");
+  throw new Error(`The environment is wrong, so Planeward does not start. ${faults}`);
+}
+
+/** The process environment, parsed once; a wrong one stops the start. */
+export const environment = parseEnvironment();

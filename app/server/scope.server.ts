@@ -1,0 +1,37 @@
+import type { EntityManager } from "@mikro-orm/postgresql";
+import { orm } from "#app/db/orm.server.ts";
+import type { Actor } from "#app/policies/roles.ts";
+import { noteScope } from "./audit.server.ts";
+
+/** On whose behalf work on the database is done, and in which request. */
+export interface Scope {
+  personId: string | null;
+  /** true only for the few queries that find out who is asking */
+  atTheDoor?: boolean;
+  requestId: string;
+}
+
+/** The scope of a signed-in person's request. */
+export interface ActorScope {
+  actor: Actor;
+  requestId: string;
+}
+
+/**
+ * The one door to the database: a manager of its own, one transaction, and the person told to row-level security, so that a
+ * forgotten filter returns nothing. What `work` throws rolls everything back.
+ */
+export async function inScope<T>(scope: Scope | ActorScope, work: (em: EntityManager) => Promise<T>): Promise<T> {
+  const personId = "actor" in scope ? scope.actor.id : scope.personId;
+  const door = "actor" in scope ? "" : scope.atTheDoor ? "sign-in" : "";
+  const { em: shared } = await orm();
+  const em = shared.fork({ clear: true });
+  return em.transactional(async (transaction) => {
+    await transaction.execute("select set_config('app.person', ?, true), set_config('app.door', ?, true)", [
+      personId ?? "",
+      door,
+    ]);
+    noteScope(transaction, { personId, requestId: scope.requestId });
+    return work(transaction as EntityManager);
+  });
+}
