@@ -99,7 +99,8 @@ export const SOURCES = {
   },
   "okada-tokumaru-1984": {
     author: "Y. Okada, Y. Tokumaru",
-    title: "Precise determination of lattice parameter and thermal expansion coefficient of silicon between 300 and 1500 K",
+    title:
+      "Precise determination of lattice parameter and thermal expansion coefficient of silicon between 300 and 1500 K",
     year: 1984,
     place: "Journal of Applied Physics 56, page 314",
     basis: "abstract read",
@@ -207,7 +208,8 @@ export const SOURCES = {
     author: "this program",
     title: "Film stress kept as a free strain quoted on a flat, rigid, thick substrate",
     year: null,
-    place: "product convention; other reference states differ by terms of the order of the film's share of the stiffness",
+    place:
+      "product convention; other reference states differ by terms of the order of the film's share of the stiffness",
     basis: "own derivation",
   },
   "common-practice": {

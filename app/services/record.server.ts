@@ -1,4 +1,4 @@
-import type { EntityManager, EntityName } from "@mikro-orm/core";
+import { OptimisticLockError, UniqueConstraintViolationException, type EntityManager, type EntityName } from "@mikro-orm/core";
 import { randomUUID } from "node:crypto";
 import type { Person } from "#app/db/entities/person.ts";
 import { notFound } from "#app/server/problem.server.ts";
@@ -18,13 +18,28 @@ interface EditableRecord {
 export interface Conflict {
   by: string;
   at: string;
-  /** version to send along when the person decides to save over it */
-  version: number;
+  /** version to send along when the person decides to save over it; null when it has to be read again first */
+  version: number | null;
 }
 
 export type Saved = { outcome: "saved"; id: string } | { outcome: "conflict"; conflict: Conflict } | { outcome: "name taken" };
 
-/** Columns that `stamp` fills in for a new record. */
+/**
+ * Runs a save and puts what the database itself refused into the same words: two people saving at the same moment get the same
+ * answer as two who saved a minute apart.
+ */
+export async function saving(work: () => Promise<Saved>): Promise<Saved> {
+  try {
+    return await work();
+  } catch (error) {
+    if (error instanceof UniqueConstraintViolationException) return { outcome: "name taken" };
+    if (error instanceof OptimisticLockError)
+      return { outcome: "conflict", conflict: { by: "Somebody", at: new Date().toISOString(), version: null } };
+    throw error;
+  }
+}
+
+/** Columns that `newRecord` fills in for a new record. */
 export function newRecord(scope: ActorScope) {
   const now = new Date();
   return { id: randomUUID(), createdAt: now, createdBy: scope.actor.id, updatedAt: now, updatedBy: scope.actor.id };

@@ -11,7 +11,7 @@ export interface ChartFigureProps {
   label: string;
   /** What it shows, in one sentence, for all readers. */
   summary: string;
-  /** Name of the x quantity with its place in a sentence, such as 'Silicon thickness'. */
+  /** Name of the x quantity, such as 'Silicon thickness'. */
   xName: string;
 }
 
@@ -43,11 +43,11 @@ export function ChartFigure({ plot, label, summary, xName }: ChartFigureProps) {
       <div className="print-only">
         <PrintPlot plot={plot} label={label} />
       </div>
-      <div className="@min-[560px]:hidden print:hidden">
+      <div className="mt-2 @min-[560px]:hidden print:hidden">
         <PlotLegend plot={plot} />
       </div>
       <figcaption className="mt-2 text-label text-quiet">{summary}</figcaption>
-      <PlotTable plot={plot} xHead={xName} />
+      <PlotTable plot={plot} label={label} xHead={xName} />
     </figure>
   );
 }

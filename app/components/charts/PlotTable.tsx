@@ -3,12 +3,14 @@ import { seriesValue } from "../drawings/seriesValue.ts";
 
 export interface PlotTableProps {
   plot: Plot;
+  /** Name of the chart that the figures belong to. */
+  label: string;
   /** Head of the first column. */
   xHead: string;
 }
 
 /** The figures of a plot as a table, at its ticks, limits, markers and the chosen value; folded away until asked for. */
-export function PlotTable({ plot, xHead }: PlotTableProps) {
+export function PlotTable({ plot, label, xHead }: PlotTableProps) {
   const places = [
     ...plot.x.ticks.map((tick) => tick.value),
     ...(plot.xLimits ?? []).map((limit) => limit.value),
@@ -21,7 +23,7 @@ export function PlotTable({ plot, xHead }: PlotTableProps) {
   return (
     <details className="screen-only mt-2">
       <summary className="link w-fit cursor-pointer text-label">Figures as a table</summary>
-      <div className="overflow-x-auto" role="region" aria-label="Figures of the chart" tabIndex={0}>
+      <div className="overflow-x-auto" role="region" aria-label={`Figures: ${label}`} tabIndex={0}>
         <table className="table">
           <thead>
             <tr>

@@ -97,7 +97,11 @@ function thicknessTicks(from: number, to: number): PlotTick[] {
   const values = oneTwoFive(from * 0.999, to).map(({ value }) => value);
   const last = values.at(-1) ?? from;
   if (to / last > 1.3) values.push(to);
-  return values.map((value) => ({ value, text: String(Math.round(value / MICROMETRE)) }));
+  return values.map((value) => ({
+    // Powers of ten come out a last digit off: a tick at the end of the axis must still lie on it.
+    value: Math.min(to, Math.max(from, value)),
+    text: String(Math.round(value / MICROMETRE)),
+  }));
 }
 
 /** A power of ten of metres in the unit that keeps it short. */

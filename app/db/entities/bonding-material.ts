@@ -24,8 +24,8 @@ export const BondingMaterial = defineEntity({
     bondTemperature: p.json<Measured>(),
     temperatureLimit: p.json<Measured>(),
     /** m */
-    leastThickness: p.double(),
-    mostThickness: p.double(),
+    leastThickness: p.double().$type<number>(),
+    mostThickness: p.double().$type<number>(),
     thicknessVariationShare: p.json<Measured>(),
     release: p.text().$type<ReleaseMethod>(),
     releaseTemperature: p.json<Measured>(),

@@ -13,7 +13,7 @@ export const Carrier = defineEntity({
     material: p.text().$type<CarrierMaterial>(),
     note: p.text(),
     /** m */
-    diameter: p.double(),
+    diameter: p.double().$type<number>(),
     thickness: p.json<Measured>(),
     youngsModulus: p.json<Measured>(),
     poissonsRatio: p.json<Measured>(),

@@ -21,7 +21,7 @@ export const FlowStepFilm = defineEntity({
     thickness: p.json<Measured>().nullable(),
     /** for this step only; null takes the film's */
     stress: p.json<Measured>().nullable(),
-    coverage: p.double(),
+    coverage: p.double().$type<number>(),
   },
 });
 export type FlowStepFilm = InferEntity<typeof FlowStepFilm>;

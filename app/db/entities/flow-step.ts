@@ -21,9 +21,9 @@ export const FlowStep = defineEntity({
     kind: p.text().$type<StepKind>(),
     title: p.text(),
     /** K */
-    peakTemperature: p.double(),
+    peakTemperature: p.double().$type<number>(),
     /** s */
-    holdTime: p.double().nullable(),
+    holdTime: p.double().$type<number>().nullable(),
     equipment: () => p.manyToOne(Equipment).nullable(),
     exposures: p.json<Exposure[]>(),
     planned: p.text().$type<Holding>(),

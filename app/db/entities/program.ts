@@ -9,7 +9,7 @@ export const Program = defineEntity({
     name: p.text().unique(),
     slug: p.text().unique(),
     /** wafer diameter, m */
-    diameter: p.double(),
+    diameter: p.double().$type<number>(),
     purpose: p.text(),
     createdAt: p.datetime(),
   },

@@ -11,7 +11,7 @@ export const Silicon = defineEntity({
     name: p.text().unique(),
     orientation: p.text().$type<"100" | "111">(),
     /** m */
-    diameter: p.double(),
+    diameter: p.double().$type<number>(),
     thickness: p.json<Measured>(),
     note: p.text(),
     ...recordProperties,

@@ -9,7 +9,7 @@ export const SiteLimit = defineEntity({
   properties: {
     id: p.uuid().primary(),
     key: p.text().$type<LimitKey>().unique(),
-    value: p.double(),
+    value: p.double().$type<number>(),
     source: p.text(),
     ...recordProperties,
   },

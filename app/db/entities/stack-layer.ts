@@ -20,7 +20,7 @@ export const StackLayer = defineEntity({
     thickness: p.json<Measured>(),
     /** stress for this stack only; null takes the film's */
     stress: p.json<Measured>().nullable(),
-    coverage: p.double(),
+    coverage: p.double().$type<number>(),
   },
 });
 export type StackLayer = InferEntity<typeof StackLayer>;

@@ -105,7 +105,12 @@ export function freeWaferShape(i: FreeWaferShapeInput): FreeWaferShape {
 }
 
 /** Checks the plate and names what its shape depends on. */
-export function checkPlate(i: PlateInput): { radius: number; thickness: number; biaxialModulus: number; kind: PlateKind } {
+export function checkPlate(i: PlateInput): {
+  radius: number;
+  thickness: number;
+  biaxialModulus: number;
+  kind: PlateKind;
+} {
   const radius = requireRadius("radius", i.radius);
   const thickness = requireThickness("thickness", i.thickness);
   if (thickness > radius / 5) {

@@ -65,11 +65,7 @@ export function snappedState(load: CurvaturePair, c: PlateCoefficients): Curvatu
   if (a === 0) return withSigns(magnitudes(0, d, c), load, -1);
   const product = snappedProduct(a, d, c);
   if (product === null) return null;
-  return withSigns(
-    { mean: -a / (1 + c.alpha * product), halfDifference: d / (1 - c.beta * product) },
-    load,
-    -1,
-  );
+  return withSigns({ mean: -a / (1 + c.alpha * product), halfDifference: d / (1 - c.beta * product) }, load, -1);
 }
 
 function withSigns(size: CurvaturePair, load: CurvaturePair, meanSign: 1 | -1): CurvaturePair {

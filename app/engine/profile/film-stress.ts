@@ -130,8 +130,7 @@ function commonPoints(pre: readonly ProfilePoint[], post: readonly ProfilePoint[
   const after = sortedByPosition(post);
   const first = after[0];
   const last = after.at(-1);
-  const common =
-    first && last ? sortedByPosition(pre).filter(({ x }) => x >= first.x && x <= last.x) : [];
+  const common = first && last ? sortedByPosition(pre).filter(({ x }) => x >= first.x && x <= last.x) : [];
   if (common.length === 0) throw new EngineInputError("post", "does not overlap the scan before the film");
   let next = 0;
   return common.map(({ x, z }) => {

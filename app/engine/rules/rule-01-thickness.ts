@@ -95,7 +95,12 @@ function againstRequired(
         "Plan support for this step, or use a tool that takes thinner silicon.",
         null,
       ),
-      limit: { label: "Least unsupported thickness of the tool", value: tool.value, unit: "m", source: provenance(tool) },
+      limit: {
+        label: "Least unsupported thickness of the tool",
+        value: tool.value,
+        unit: "m",
+        source: provenance(tool),
+      },
     };
   return meets(context, state, required, make);
 }

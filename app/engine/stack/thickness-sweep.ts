@@ -23,7 +23,8 @@ const withThickness = (stack: StackInput, thickness: number): StackInput => ({
  */
 export function thicknessSweep(stack: StackInput, range: { from: number; to: number; points: number }): SweepPoint[] {
   const { from, to, points } = range;
-  if (!(from > 0) || !(to > from)) throw new EngineInputError("sweep", "the range of thickness is empty", "0 m < from < to");
+  if (!(from > 0) || !(to > from))
+    throw new EngineInputError("sweep", "the range of thickness is empty", "0 m < from < to");
   if (!Number.isInteger(points) || points < 2 || points > 500)
     throw new EngineInputError("sweep.points", "the number of points is out of range", "2 to 500");
   return Array.from({ length: points }, (_, index) => {

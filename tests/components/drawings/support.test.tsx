@@ -91,7 +91,7 @@ describe("words of planned support", () => {
   });
 
   it("take a row of their own when they would run into the next", () => {
-    const spans = plannedSpans(["Silicon carrier", "grinding tape", "film frame"], 48, 12.5);
+    const spans = plannedSpans(["Silicon carrier 775 µm", "grinding tape 200 µm", "film frame"], 48, 12.5);
     expect(spans.map((span) => span.row)).toEqual([0, 1, 2]);
   });
 });

@@ -32,7 +32,12 @@ export function freeWaferShapeWorking(i: FreeWaferShapeInput): Working {
       ...plateLines(i),
       { symbol: "S/S_cr", meaning: "load over critical load", value: shape.stabilityRatio, unit: "1" },
     ],
-    result: { symbol: "s", meaning: "rim over centre along the axis that bends most", value: shape.bowMajor, unit: "m" },
+    result: {
+      symbol: "s",
+      meaning: "rim over centre along the axis that bends most",
+      value: shape.bowMajor,
+      unit: "m",
+    },
     note: i.crystal === "100" ? ANISOTROPY : undefined,
     from: [criticalCurvatureWorking(i)],
   };
@@ -61,7 +66,12 @@ export function criticalFilmForceWorking(i: PlateInput): Working {
       ...plateLines(i),
       { symbol: "M", meaning: "biaxial modulus of the wafer", value: biaxialModulus, unit: "Pa" },
     ],
-    result: { symbol: "N_cr", meaning: "film force at which it starts to roll", value: criticalFilmForce(i), unit: "N/m" },
+    result: {
+      symbol: "N_cr",
+      meaning: "film force at which it starts to roll",
+      value: criticalFilmForce(i),
+      unit: "N/m",
+    },
     from: [criticalCurvatureWorking(i)],
   };
 }

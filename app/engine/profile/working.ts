@@ -1,5 +1,5 @@
 import type { Working, WorkingLine } from "../working.ts";
-import { stoneyStressWorking } from "../stoney/workings.ts";
+import { stoneyStressWorking } from "../stoney/working.ts";
 import { filmStressFromProfiles, type FilmStressFromProfilesInput } from "./film-stress.ts";
 
 /** The calculation of `filmStressFromProfiles` as data, with its uncertainty budget underneath. */

@@ -3,7 +3,7 @@ import { ROOM_TEMPERATURE, type Layer } from "./layer.ts";
 import { solveLaminate } from "./solve-laminate.ts";
 
 /** The curvature of `solveLaminate` as data: for each layer, bottom to top, what went into the sums. */
-export function laminateCurvatureWorking(
+export function laminateWorking(
   layersBottomToTop: readonly Layer[],
   o: { temperature?: number } = {},
 ): Working {
@@ -17,7 +17,10 @@ export function laminateCurvatureWorking(
   };
   return {
     equation: "laminate",
-    inputs: [temperature, ...layersBottomToTop.flatMap((layer, n) => layerLines(layer, n + 1, solved.freeStrain[n] ?? 0))],
+    inputs: [
+      temperature,
+      ...layersBottomToTop.flatMap((layer, n) => layerLines(layer, n + 1, solved.freeStrain[n] ?? 0)),
+    ],
     result: { symbol: "κ", meaning: "curvature, bowl positive", value: solved.curvature, unit: "1/m" },
     note: "Layers are counted from the bottom, device side on top.",
   };

@@ -1,0 +1,22 @@
+import type { Equation } from "./equations/equation.ts";
+import { HANDLING } from "./equations/handling.ts";
+import { LAMINATE } from "./equations/laminate.ts";
+import { METROLOGY } from "./equations/metrology.ts";
+import { PLATE } from "./equations/plate.ts";
+import { SILICON } from "./equations/silicon.ts";
+import { THIN_FILM } from "./equations/thin-film.ts";
+
+export type { Equation } from "./equations/equation.ts";
+
+/** Every equation that a figure may rest on. The method page lists it; a `Working` names one by its key. */
+export const EQUATIONS = {
+  ...THIN_FILM,
+  ...SILICON,
+  ...LAMINATE,
+  ...PLATE,
+  ...METROLOGY,
+  ...HANDLING,
+} as const satisfies Record<string, Equation>;
+
+/** Key of an equation. */
+export type EquationId = keyof typeof EQUATIONS;

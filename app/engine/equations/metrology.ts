@@ -1,0 +1,44 @@
+import type { Equation } from "./equation.ts";
+
+export const METROLOGY = {
+  "profile-fit": {
+    title: "Curvature of a scan",
+    formula: "z = c_0 + c_1 x + c_2 x^2 by least squares, κ = 2 c_2 / (1 + c_1^2)^1.5",
+    symbols: [
+      { symbol: "z", meaning: "height", unit: "m" },
+      { symbol: "x", meaning: "position from the middle of the scan", unit: "m" },
+      { symbol: "κ", meaning: "curvature, positive for a bowl", unit: "1/m" },
+      { symbol: "c_1", meaning: "tilt at the middle", unit: "1" },
+      { symbol: "c_2", meaning: "half the curvature of the parabola", unit: "1/m" },
+    ],
+    range: "Edge left out; a scan steeper than 0.03 is fitted by a circle. Scatter independent from point to point.",
+    sources: ["gum-2008", "common-practice"],
+    caution: "A fourth-order share beyond 5 % says that the shape is not spherical.",
+  },
+  "film-stress-from-profiles": {
+    title: "Film stress from a scan before and after",
+    formula: "κ − κ_0 from z_post − z_pre, σ_f = M h^2 (κ − κ_0) / (6 h_f)",
+    symbols: [
+      { symbol: "z_pre", meaning: "scan before the film; z_post after it, same azimuth and supports", unit: "m" },
+      { symbol: "σ_f", meaning: "film stress, tension positive", unit: "Pa" },
+      { symbol: "M", meaning: "biaxial modulus of the wafer", unit: "Pa" },
+      { symbol: "h", meaning: "wafer thickness", unit: "m" },
+      { symbol: "h_f", meaning: "film thickness", unit: "m" },
+    ],
+    range: "As for Stoney's relation. Subtraction removes the wafer's own shape and most of gravity.",
+    sources: ["stoney-1909", "feng-huang-rosakis-2007", "gum-2008"],
+  },
+  "first-order-uncertainty": {
+    title: "Standard uncertainty, first order",
+    formula: "u^2 = Σ (df/dx_i)^2 u(x_i)^2",
+    symbols: [
+      { symbol: "u", meaning: "standard uncertainty of the figure, in its own unit", unit: "1" },
+      { symbol: "u_i", meaning: "share of input i: its uncertainty times the slope of the figure", unit: "1" },
+      { symbol: "x_i", meaning: "input i, in its own unit", unit: "1" },
+    ],
+    range: "Independent inputs, figure close to linear over their uncertainties.",
+    sources: ["gum-2008"],
+    caution:
+      "A tolerance is the half-width of the interval believed to hold the value: its standard uncertainty is tolerance/sqrt(3).",
+  },
+} as const satisfies Record<string, Equation>;

@@ -1,0 +1,124 @@
+import { Assessment } from "#app/db/entities/assessment.ts";
+import { FlowStep } from "#app/db/entities/flow-step.ts";
+import { Flow } from "#app/db/entities/flow.ts";
+import { Silicon } from "#app/db/entities/silicon.ts";
+import type { Outcome } from "#app/engine/vocabulary.ts";
+import { PAGE_SIZE, type ListPage, type ListParams } from "#app/lib/list-params.ts";
+import type { FlowValues } from "#app/schemas/flow.ts";
+import { notFound, problem } from "#app/server/problem.server.ts";
+import { inScope, type ActorScope } from "#app/server/scope.server.ts";
+import { escapeLike } from "../like.server.ts";
+import { requireInProgram } from "../permission.server.ts";
+import { programFilter } from "../program-filter.server.ts";
+import { conflictOf, newRecord, saving, touch, type Saved } from "../record.server.ts";
+import { idFrom } from "../uuid.server.ts";
+import type { FlowDetail } from "./flow-detail.ts";
+import { findFlow, readFlow } from "./read-flow.server.ts";
+
+export const FLOW_SORTS = ["updated", "name", "program"] as const;
+
+export interface FlowRow {
+  id: string;
+  name: string;
+  program: string;
+  diameter: number;
+  steps: number;
+  updatedAt: string;
+  latest: { id: string; number: number; outcome: Outcome; at: string } | null;
+}
+
+/** A page of the flows that the person may see, each with its newest assessment. */
+export async function listFlows(scope: ActorScope, params: ListParams): Promise<ListPage<FlowRow>> {
+  return inScope(scope, async (em) => {
+    const direction = params.descending ? "desc" : "asc";
+    const [flows, total] = await em.findAndCount(
+      Flow,
+      {
+        program: programFilter(scope.actor, "see the work", params.filters["program"]),
+        ...(params.query ? { name: { $ilike: `%${escapeLike(params.query)}%` } } : {}),
+      },
+      {
+        populate: ["program", "silicon"],
+        orderBy: [
+          params.sort === "name"
+            ? { name: direction }
+            : params.sort === "program"
+              ? { program: { name: direction } }
+              : { updatedAt: params.descending ? "asc" : "desc" },
+          { id: "asc" },
+        ],
+        limit: PAGE_SIZE,
+        offset: (params.page - 1) * PAGE_SIZE,
+      },
+    );
+    const ids = flows.map(({ id }) => id);
+    const steps = await em.find(FlowStep, { flow: { $in: ids } }, { fields: ["id", "flow"] });
+    const assessments = await em.find(
+      Assessment,
+      { flow: { $in: ids } },
+      { fields: ["id", "flow", "number", "outcome", "createdAt"], orderBy: { number: "asc" } },
+    );
+    // Later ones overwrite earlier ones, so the newest of each flow is left.
+    const latest = new Map(assessments.map((assessment) => [assessment.flow.id, assessment]));
+    const rows = flows.map((flow): FlowRow => {
+      const newest = latest.get(flow.id);
+      return {
+        id: flow.id,
+        name: flow.name,
+        program: flow.program.name,
+        diameter: flow.silicon.diameter,
+        steps: steps.filter((step) => step.flow.id === flow.id).length,
+        updatedAt: flow.updatedAt.toISOString(),
+        latest: newest
+          ? { id: newest.id, number: newest.number, outcome: newest.outcome, at: newest.createdAt.toISOString() }
+          : null,
+      };
+    });
+    return { rows, total, params };
+  });
+}
+
+/** One flow, whole. */
+export async function getFlow(scope: ActorScope, id: string | undefined): Promise<FlowDetail> {
+  return inScope(scope, (em) => readFlow(em, scope, idFrom(id, "flow")));
+}
+
+/** Adds a flow or changes its head: name, silicon, incoming thickness. */
+export async function saveFlow(
+  scope: ActorScope,
+  { id, version, values }: { id: string | null; version: number | null; values: FlowValues },
+): Promise<Saved> {
+  return saving(() =>
+    inScope(scope, async (em): Promise<Saved> => {
+      const flow = id === null ? null : await findFlow(em, scope, id);
+      const programId = flow?.program.id ?? values.program;
+      requireInProgram(scope, "edit stacks and flows", programId, id === null ? "program" : "flow");
+      const conflict = flow && conflictOf(flow, version);
+      if (conflict) return { outcome: "conflict", conflict };
+      const namesake = await em.findOne(Flow, { program: programId, name: values.name });
+      if (namesake && namesake.id !== id) return { outcome: "name taken" };
+      const silicon = await em.findOne(Silicon, { id: values.silicon });
+      if (!silicon) throw notFound("silicon wafer");
+      const columns = { name: values.name, note: values.note, silicon, incomingThickness: values.incomingThickness };
+      const saved = flow ?? em.create(Flow, { ...newRecord(scope), program: programId, ...columns });
+      if (flow) {
+        em.assign(flow, columns);
+        touch(flow, scope);
+      }
+      await em.flush();
+      return { outcome: "saved", id: saved.id };
+    }),
+  );
+}
+
+/** Removes a flow that was never assessed; one that was is kept, because its assessments are. */
+export async function removeFlow(scope: ActorScope, id: string): Promise<void> {
+  await inScope(scope, async (em) => {
+    const flow = await findFlow(em, scope, id);
+    requireInProgram(scope, "edit stacks and flows", flow.program.id, "flow");
+    if ((await em.count(Assessment, { flow: flow.id })) > 0)
+      throw problem(409, "This flow has been assessed, so it is kept with its assessments.");
+    em.remove(flow);
+    await em.flush();
+  });
+}

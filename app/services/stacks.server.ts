@@ -1,0 +1,273 @@
+import { randomUUID } from "node:crypto";
+import type { EntityManager } from "@mikro-orm/postgresql";
+import { Film } from "#app/db/entities/film.ts";
+import { Silicon } from "#app/db/entities/silicon.ts";
+import { StackLayer } from "#app/db/entities/stack-layer.ts";
+import { Stack } from "#app/db/entities/stack.ts";
+import type { Measured } from "#app/engine/measured.ts";
+import type { StackInput } from "#app/engine/stack/model.ts";
+import type { Side } from "#app/engine/vocabulary.ts";
+import { PAGE_SIZE, type ListPage, type ListParams } from "#app/lib/list-params.ts";
+import { mayInProgram, programsWhere } from "#app/policies/permissions.ts";
+import type { StackValues } from "#app/schemas/stack.ts";
+import { notFound } from "#app/server/problem.server.ts";
+import { inScope, type ActorScope } from "#app/server/scope.server.ts";
+import { escapeLike } from "./like.server.ts";
+import { requireInProgram } from "./permission.server.ts";
+import { programFilter } from "./program-filter.server.ts";
+import { conflictOf, newRecord, saving, stampOf, touch, type RecordStamp, type Saved } from "./record.server.ts";
+import { idFrom } from "./uuid.server.ts";
+
+export const STACK_SORTS = ["updated", "name", "program", "thickness"] as const;
+
+export interface StackRow {
+  id: string;
+  name: string;
+  program: string;
+  diameter: number;
+  thickness: number;
+  films: number;
+  updatedAt: string;
+  input: StackInput;
+}
+
+export interface StackLayerDetail {
+  side: Side;
+  filmId: string;
+  filmName: string;
+  filmKind: string;
+  thickness: Measured;
+  /** this stack's own, when it has one */
+  ownStress: Measured | null;
+  /** the one that counts: own, else the film's */
+  stress: Measured;
+  youngsModulus: number;
+  poissonsRatio: number;
+  expansion: number;
+  coverage: number;
+}
+
+export interface StackDetail {
+  id: string;
+  name: string;
+  note: string;
+  program: { id: string; name: string; slug: string };
+  silicon: { id: string; name: string; diameter: number; orientation: "100" | "111"; nominalThickness: number };
+  siliconThickness: Measured;
+  layers: StackLayerDetail[];
+  stamp: RecordStamp;
+  mayEdit: boolean;
+}
+
+function layerDetail(layer: StackLayer): StackLayerDetail {
+  const { film } = layer;
+  return {
+    side: layer.side,
+    filmId: film.id,
+    filmName: film.name,
+    filmKind: film.kind,
+    thickness: layer.thickness,
+    ownStress: layer.stress ?? null,
+    stress: layer.stress ?? film.stress,
+    youngsModulus: film.youngsModulus.value,
+    poissonsRatio: film.poissonsRatio.value,
+    expansion: film.expansion.value,
+    coverage: layer.coverage,
+  };
+}
+
+/** The engine's view of a stack at 25 °C. */
+export function stackInputOf(stack: Pick<StackDetail, "silicon" | "siliconThickness" | "layers">): StackInput {
+  return {
+    wafer: {
+      diameter: stack.silicon.diameter,
+      orientation: stack.silicon.orientation,
+      thickness: stack.siliconThickness.value,
+      thicknessTolerance: stack.siliconThickness.tolerance ?? undefined,
+    },
+    films: stack.layers.map((layer) => ({
+      side: layer.side,
+      thickness: layer.thickness.value,
+      stress: layer.stress.value,
+      youngsModulus: layer.youngsModulus,
+      poissonsRatio: layer.poissonsRatio,
+      expansion: layer.expansion,
+      coverage: layer.coverage,
+    })),
+  };
+}
+
+async function layersByStack(em: EntityManager, stackIds: string[]): Promise<Map<string, StackLayerDetail[]>> {
+  const layers = await em.find(
+    StackLayer,
+    { stack: { $in: stackIds } },
+    { populate: ["film"], orderBy: { side: "desc", position: "asc" } },
+  );
+  const found = new Map<string, StackLayerDetail[]>(stackIds.map((id) => [id, []]));
+  for (const layer of layers) found.get(layer.stack.id)?.push(layerDetail(layer));
+  return found;
+}
+
+function detailOf(stack: Stack, layers: StackLayerDetail[], scope: ActorScope): StackDetail {
+  const { program, silicon } = stack;
+  return {
+    id: stack.id,
+    name: stack.name,
+    note: stack.note,
+    program: { id: program.id, name: program.name, slug: program.slug },
+    silicon: {
+      id: silicon.id,
+      name: silicon.name,
+      diameter: silicon.diameter,
+      orientation: silicon.orientation,
+      nominalThickness: silicon.thickness.value,
+    },
+    siliconThickness: stack.siliconThickness,
+    layers,
+    stamp: stampOf(stack),
+    mayEdit: mayInProgram(scope.actor, "edit stacks and flows", program.id),
+  };
+}
+
+/** A page of the stacks that the person may see. */
+export async function listStacks(scope: ActorScope, params: ListParams): Promise<ListPage<StackRow>> {
+  return inScope(scope, async (em) => {
+    const direction = params.descending ? "desc" : "asc";
+    const [stacks, total] = await em.findAndCount(
+      Stack,
+      {
+        program: programFilter(scope.actor, "see the work", params.filters["program"]),
+        ...(params.query ? { name: { $ilike: `%${escapeLike(params.query)}%` } } : {}),
+      },
+      {
+        populate: ["program", "silicon"],
+        orderBy: [
+          params.sort === "name"
+            ? { name: direction }
+            : params.sort === "program"
+              ? { program: { name: direction } }
+              : params.sort === "thickness"
+                ? { siliconThickness: { value: direction } as never }
+                : { updatedAt: params.descending ? "asc" : "desc" },
+          { id: "asc" },
+        ],
+        limit: PAGE_SIZE,
+        offset: (params.page - 1) * PAGE_SIZE,
+      },
+    );
+    const layers = await layersByStack(em, stacks.map(({ id }) => id));
+    const rows = stacks.map((stack): StackRow => {
+      const detail = detailOf(stack, layers.get(stack.id) ?? [], scope);
+      return {
+        id: stack.id,
+        name: stack.name,
+        program: stack.program.name,
+        diameter: stack.silicon.diameter,
+        thickness: stack.siliconThickness.value,
+        films: detail.layers.length,
+        updatedAt: detail.stamp.updatedAt,
+        input: stackInputOf(detail),
+      };
+    });
+    return { rows, total, params };
+  });
+}
+
+/** One stack, whole. */
+export async function getStack(scope: ActorScope, id: string | undefined): Promise<StackDetail> {
+  return inScope(scope, async (em) => {
+    const stack = await em.findOne(
+      Stack,
+      { id: idFrom(id, "stack") },
+      { populate: ["program", "silicon", "updatedBy"] },
+    );
+    if (!stack) throw notFound("stack");
+    requireInProgram(scope, "see the work", stack.program.id, "stack");
+    const layers = await layersByStack(em, [stack.id]);
+    return detailOf(stack, layers.get(stack.id) ?? [], scope);
+  });
+}
+
+/** Names of the stacks that the person may lay over another, newest first. */
+export async function stackChoices(scope: ActorScope): Promise<{ id: string; name: string; program: string }[]> {
+  const programs = programsWhere(scope.actor, "see the work").map(({ programId }) => programId);
+  return inScope(scope, async (em) => {
+    const stacks = await em.find(
+      Stack,
+      { program: { $in: programs } },
+      { populate: ["program"], orderBy: { updatedAt: "desc" }, limit: 200 },
+    );
+    return stacks.map(({ id, name, program }) => ({ id, name, program: program.name }));
+  });
+}
+
+/** Adds or changes a stack with all its layers, in one transaction. */
+export async function saveStack(
+  scope: ActorScope,
+  { id, version, values }: { id: string | null; version: number | null; values: StackValues },
+): Promise<Saved> {
+  return saving(() =>
+    inScope(scope, async (em): Promise<Saved> => {
+      const stack = id === null ? null : await em.findOne(Stack, { id }, { populate: ["updatedBy", "program"] });
+      if (id !== null && !stack) throw notFound("stack");
+      const programId = stack?.program.id ?? values.program;
+      requireInProgram(scope, "edit stacks and flows", programId, id === null ? "program" : "stack");
+      const conflict = stack && conflictOf(stack, version);
+      if (conflict) return { outcome: "conflict", conflict };
+      const namesake = await em.findOne(Stack, { program: programId, name: values.name });
+      if (namesake && namesake.id !== id) return { outcome: "name taken" };
+
+      const silicon = await em.findOne(Silicon, { id: values.silicon });
+      if (!silicon) throw notFound("silicon wafer");
+      const columns = {
+        name: values.name,
+        note: values.note,
+        silicon,
+        siliconThickness: values.siliconThickness,
+      };
+      const saved = stack ?? em.create(Stack, { ...newRecord(scope), program: programId, ...columns });
+      if (stack) {
+        em.assign(stack, columns);
+        touch(stack, scope);
+      }
+      await replaceLayers(em, saved, values.layers);
+      await em.flush();
+      return { outcome: "saved", id: saved.id };
+    }),
+  );
+}
+
+/** Layers have no life of their own: a save writes them anew in the order that the form had. */
+async function replaceLayers(em: EntityManager, stack: Stack, layers: StackValues["layers"]): Promise<void> {
+  const films = await em.find(Film, { id: { $in: layers.map(({ film }) => film) } });
+  const known = new Map(films.map((film) => [film.id, film]));
+  for (const old of await em.find(StackLayer, { stack: stack.id })) em.remove(old);
+  const next: Record<Side, number> = { front: 0, back: 0 };
+  for (const { side, film: filmId, thickness, stress, coverage } of layers) {
+    const film = known.get(filmId);
+    if (!film) throw notFound("film");
+    em.create(StackLayer, {
+      id: randomUUID(),
+      program: stack.program,
+      stack,
+      side,
+      position: next[side]++,
+      film,
+      thickness,
+      stress,
+      coverage,
+    });
+  }
+}
+
+/** Removes a stack. What was assessed from a flow does not depend on it. */
+export async function removeStack(scope: ActorScope, id: string): Promise<void> {
+  await inScope(scope, async (em) => {
+    const stack = await em.findOne(Stack, { id }, { populate: ["program"] });
+    if (!stack) throw notFound("stack");
+    requireInProgram(scope, "edit stacks and flows", stack.program.id, "stack");
+    for (const layer of await em.find(StackLayer, { stack: stack.id })) em.remove(layer);
+    em.remove(stack);
+    await em.flush();
+  });
+}
