@@ -1,1 +1,68 @@
-export type AssessmentResult = object;
+import type { Exposure, FaceUp, Holding, Outcome, ShapeRegime, ShapeWord, SupportClass } from "#app/engine/vocabulary.ts";
+import type { StepKind } from "#app/engine/flow/model.ts";
+import type { Finding } from "#app/engine/rules/finding.ts";
+import type { AssumedInput, Verdict } from "#app/engine/flow/assess.ts";
+import type { Contribution } from "#app/engine/flow/uncertainty.ts";
+
+/** How a wafer or pair lies at one temperature. `bow` is the standard one; SI. */
+export interface ShapeResult {
+  temperature: number;
+  bow: number;
+  warp: number;
+  edgesUp: boolean;
+  regime: ShapeRegime;
+  stabilityRatio: number;
+  rollRadius: number | null;
+  standardUncertainty: number | null;
+}
+
+/** One step of a stored assessment, complete for screens and sheets. SI. */
+export interface StepResult {
+  number: number;
+  kind: StepKind;
+  title: string;
+  peakTemperature: number;
+  holdTime: number | null;
+  exposures: Exposure[];
+  equipment: { name: string; edgesUp: number | null; edgesDown: number | null } | null;
+  siliconBefore: number;
+  silicon: number;
+  siliconLeast: number;
+  planned: Holding;
+  /** what that is by name: the carrier, else the holding itself */
+  plannedName: string;
+  required: SupportClass;
+  faceUp: FaceUp;
+  lies: ShapeWord;
+  atRoom: ShapeResult | null;
+  atPeak: ShapeResult | null;
+  /** if nothing held it, at 25 °C */
+  released: ShapeResult;
+  filmForce: { front: number; back: number };
+  outcome: Outcome;
+  /** inputs that move this step's bow most, largest first */
+  budget: Contribution[];
+}
+
+/** What a bond of the flow is, for the sheet. */
+export interface BondResult {
+  fromStep: number;
+  toStep: number;
+  carrier: string;
+  carrierDiameter: number;
+  material: string;
+  thickness: number;
+  temperatureLimit: number;
+  release: string;
+}
+
+/** An assessment's results as they are stored, for ever. */
+export interface AssessmentResult {
+  wafer: { name: string; diameter: number; orientation: "100" | "111"; thickness: number };
+  sentences: string[];
+  verdict: Verdict;
+  steps: StepResult[];
+  findings: Finding[];
+  assumed: AssumedInput[];
+  bonds: BondResult[];
+}

@@ -47,13 +47,16 @@ export function lockTemperature(bond: BondState): number {
   return Math.min(bond.bondTemperature, softening);
 }
 
+/** Share of its locked-in modulus that a bonding material keeps above its softening point (common practice, no source). */
+const SOFT_SHARE = 0.01;
+
 function bondLayers(bond: BondState, temperature: number): Layer[] {
   const referenceTemperature = lockTemperature(bond);
   const soft = bond.material.softening !== null && temperature > bond.material.softening.value;
   return [
     {
       thickness: bond.thickness.value,
-      youngsModulus: bond.material.effectiveModulus.value,
+      youngsModulus: bond.material.effectiveModulus.value * (soft ? SOFT_SHARE : 1),
       poissonsRatio: bond.material.poissonsRatio.value,
       cte: soft ? bond.material.expansionAbove.value : bond.material.expansionBelow.value,
       referenceTemperature,

@@ -3,10 +3,7 @@ import { ROOM_TEMPERATURE, type Layer } from "./layer.ts";
 import { solveLaminate } from "./solve-laminate.ts";
 
 /** The curvature of `solveLaminate` as data: for each layer, bottom to top, what went into the sums. */
-export function laminateWorking(
-  layersBottomToTop: readonly Layer[],
-  o: { temperature?: number } = {},
-): Working {
+export function laminateWorking(layersBottomToTop: readonly Layer[], o: { temperature?: number } = {}): Working {
   const solved = solveLaminate(layersBottomToTop, o);
   const temperature: WorkingLine = {
     symbol: "T",

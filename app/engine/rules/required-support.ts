@@ -28,8 +28,9 @@ export function thicknessLimits(diameter: number): { bare: LimitKey; gripper: Li
   return null;
 }
 
-/** What a step does that thin silicon cannot take on tape, or null. */
+/** What a step does that thin silicon cannot take on tape, or null. A debond's own heat is for the debond rule. */
 export function demandingProcess(step: SupportQuestion, tapeTemperature: number): string | null {
+  if (step.kind === "debond") return null;
   if (step.kind === "pattern") return "lithography";
   if (step.kind === "plate") return "plating";
   if (step.kind === "polish") return "polishing";

@@ -20,7 +20,7 @@ export function requiredAt(
   { flow, limits }: Pick<RuleContext, "flow" | "limits">,
   state: StepState,
 ): RequiredSupport | null {
-  return requiredSupport(thinnest(state), flow.wafer.diameter, state.step, state.after.mount, limits);
+  return requiredSupport(thinnest(state), flow.wafer.diameter, state.step, state.before.mount, limits);
 }
 
 const um = (value: number) => formatQuantity(value, "length", { unit: "µm" });
@@ -116,7 +116,7 @@ function meets(context: RuleContext, state: StepState, required: RequiredSupport
   const { planned } = state.step;
   const { value } = state.after.silicon;
   const least = thinnest(state);
-  const nominal = requiredSupport(value, flow.wafer.diameter, state.step, state.after.mount, limits);
+  const nominal = requiredSupport(value, flow.wafer.diameter, state.step, state.before.mount, limits);
   if (setsThickness(state) && nominal && nominal.support !== required.support)
     return make(
       "caution",

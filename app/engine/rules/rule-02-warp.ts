@@ -14,7 +14,7 @@ const TITLE = "Warp on the tool";
 
 /** One moment at which the wafer lies on the tool with a shape of its own. */
 interface Moment {
-  when: "as loaded" | "after the step" | "free at peak";
+  when: "as it is loaded" | "as it leaves" | "free at peak";
   shape: LyingShape;
   faceUp: FaceUp;
   uncertainty: number | null;
@@ -27,14 +27,14 @@ function moments({ steps, uncertainty }: RuleContext, state: StepState): Moment[
   const found: Moment[] = [];
   if (previous?.atRoom)
     found.push({
-      when: "as loaded",
+      when: "as it is loaded",
       shape: previous.atRoom,
       faceUp: previous.after.faceUp,
       uncertainty: uncertainty[previous.number - 1]?.atRoom ?? null,
     });
   if (state.atRoom)
     found.push({
-      when: "after the step",
+      when: "as it leaves",
       shape: state.atRoom,
       faceUp: state.after.faceUp,
       uncertainty: own?.atRoom ?? null,
