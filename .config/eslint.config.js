@@ -8,8 +8,24 @@ const ormOnly = [
   ["@mikro-orm/*", "#app/db/**", "**/db/**"],
   "Only services, db and the server's scope touch entities: call a service and pass on its DTO.",
 ];
-const noServer = [["**/*.server", "**/*.server.*", "#app/server/**", "#app/services/**", "#app/db/**"], "Components run in the browser too."];
+const noServer = [
+  ["**/*.server", "**/*.server.*", "#app/server/**", "#app/services/**", "#app/db/**"],
+  "Components run in the browser too.",
+];
 const nodeModules = [["node:*"], "This code runs in the browser too."];
+
+/** Packages that the engine does without. */
+const packages = [
+  "node:*",
+  "react",
+  "react-*",
+  "react-router",
+  "@*/*",
+  "zod",
+  "recharts",
+  "papaparse",
+  "!mathjs/number",
+];
 
 export default tseslint.config(
   { ignores: ["**/node_modules/**", "build/**", ".react-router/**", ".planeward/**", "test-results/**"] },
@@ -35,13 +51,36 @@ export default tseslint.config(
     rules: {
       "no-restricted-imports": forbid(
         [["#app/*", "!#app/engine", "!#app/engine/**"], "The engine imports nothing outside itself but mathjs."],
-        [["node:*", "react", "react-*", "react-router", "@*/*", "zod", "recharts", "papaparse", "mathjs"], "The engine imports nothing outside itself but mathjs/number, and that in units/ only."],
+        [
+          [...packages, "mathjs/**"],
+          "The engine imports nothing outside itself but mathjs/number, and that in units/ only.",
+        ],
       ),
-      "no-restricted-globals": ["error", "Date", "window", "document", "process", "fetch", "console", "setTimeout", "performance", "crypto"],
+      "no-restricted-globals": [
+        "error",
+        "Date",
+        "window",
+        "document",
+        "process",
+        "fetch",
+        "console",
+        "setTimeout",
+        "performance",
+        "crypto",
+      ],
       "no-restricted-properties": [
         "error",
         { object: "Math", property: "random", message: "The engine has no random source of its own: take a seed." },
       ],
+    },
+  },
+  {
+    files: ["app/engine/units/*.ts"],
+    rules: {
+      "no-restricted-imports": forbid(
+        [["#app/*", "!#app/engine", "!#app/engine/**"], "The engine imports nothing outside itself but mathjs."],
+        [packages, "Units take their exact factors from mathjs/number and nothing else from outside."],
+      ),
     },
   },
   {
@@ -50,7 +89,9 @@ export default tseslint.config(
   },
   {
     files: ["app/policies/**/*.ts"],
-    rules: { "no-restricted-imports": forbid(noServer, ormOnly, nodeModules, [["react", "react-*"], "Policies are pure."]) },
+    rules: {
+      "no-restricted-imports": forbid(noServer, ormOnly, nodeModules, [["react", "react-*"], "Policies are pure."]),
+    },
   },
   {
     files: ["app/routes/**/*.{ts,tsx}"],

@@ -49,7 +49,10 @@ export default function handleRequest(
 export function handleError(error: unknown, { request }: { request: Request }): void {
   if (request.signal.aborted) return;
   log.error(
-    { path: new URL(request.url).pathname, error: error instanceof Error ? (error.stack ?? error.message) : String(error) },
+    {
+      path: new URL(request.url).pathname,
+      error: error instanceof Error ? (error.stack ?? error.message) : String(error),
+    },
     "a request failed",
   );
 }

@@ -1,4 +1,12 @@
-import { isRouteErrorResponse, Links, Meta, Outlet, Scripts, ScrollRestoration, useRouteLoaderData } from "react-router";
+import {
+  isRouteErrorResponse,
+  Links,
+  Meta,
+  Outlet,
+  Scripts,
+  ScrollRestoration,
+  useRouteLoaderData,
+} from "react-router";
 import stylesheet from "./app.css?url";
 import { ErrorPage } from "./components/layout/ErrorPage.tsx";
 import { originCheck } from "./middleware/origin-check.server.ts";

@@ -14,7 +14,11 @@ export const PAGE_SIZE = 25;
 /** Reads a list's parameters; anything not understood falls back to the first of `sorts`, ascending, first page. */
 export function readListParams(
   search: URLSearchParams,
-  { sorts, filters = [], descending = false }: { sorts: readonly string[]; filters?: readonly string[]; descending?: boolean },
+  {
+    sorts,
+    filters = [],
+    descending = false,
+  }: { sorts: readonly string[]; filters?: readonly string[]; descending?: boolean },
 ): ListParams {
   const asked = search.get("sort") ?? "";
   const name = asked.replace(/^-/, "");

@@ -35,7 +35,9 @@ function decode(bytes: Uint8Array, name: string): string {
   if (bytes.length === 0) throw new ProfileFileError(`${name} is empty. Choose the file that the profilometer wrote.`);
   const other = OTHER_FILES.find(({ bytes: start }) => start.every((byte, index) => bytes[index] === byte));
   if (other)
-    throw new ProfileFileError(`${name} is ${other.name}, not a text file. Export the profile as CSV with two columns.`);
+    throw new ProfileFileError(
+      `${name} is ${other.name}, not a text file. Export the profile as CSV with two columns.`,
+    );
   const [first, second] = bytes;
   if (first === 0xff && second === 0xfe) return new TextDecoder("utf-16le").decode(bytes);
   if (first === 0xfe && second === 0xff) return new TextDecoder("utf-16be").decode(bytes);
@@ -51,7 +53,8 @@ function decode(bytes: Uint8Array, name: string): string {
 /** A number in a cell under a decimal mark that the person has stated; null when it is anything else. */
 function cellNumber(cell: string, decimalMark: "point" | "comma"): number | null {
   const text = cell.trim().replace("\u2212", "-");
-  const pattern = decimalMark === "point" ? /^[+-]?(\d+\.?\d*|\.\d+)([eE][+-]?\d+)?$/ : /^[+-]?(\d+,?\d*|,\d+)([eE][+-]?\d+)?$/;
+  const pattern =
+    decimalMark === "point" ? /^[+-]?(\d+\.?\d*|\.\d+)([eE][+-]?\d+)?$/ : /^[+-]?(\d+,?\d*|,\d+)([eE][+-]?\d+)?$/;
   if (!pattern.test(text)) return null;
   const value = Number(text.replace(",", "."));
   return Number.isFinite(value) ? value : null;
@@ -78,8 +81,10 @@ export function readProfile(bytes: Uint8Array, name: string, format: ProfileForm
       return;
     }
     rows += 1;
-    if (x === null || x === undefined) skipped.push({ row: index + 1, column: "position", text: (cells[0] ?? "").slice(0, 40) });
-    else if (z === null || z === undefined) skipped.push({ row: index + 1, column: "height", text: (cells[1] ?? "").slice(0, 40) });
+    if (x === null || x === undefined)
+      skipped.push({ row: index + 1, column: "position", text: (cells[0] ?? "").slice(0, 40) });
+    else if (z === null || z === undefined)
+      skipped.push({ row: index + 1, column: "height", text: (cells[1] ?? "").slice(0, 40) });
     else points.push({ x: x * METRES[format.positionUnit], z: z * METRES[format.heightUnit] });
   });
   refuseUnusable(points.length, rows, skipped, name, format);
@@ -98,13 +103,19 @@ export function readProfile(bytes: Uint8Array, name: string, format: ProfileForm
 
 function refuseUnusable(used: number, rows: number, skipped: SkippedRow[], name: string, format: ProfileFormat): void {
   const first = skipped[0];
-  const example = first ? ` Row ${first.row}, ${first.column}: “${first.text}” is not a number with a decimal ${format.decimalMark}.` : "";
+  const example = first
+    ? ` Row ${first.row}, ${first.column}: “${first.text}” is not a number with a decimal ${format.decimalMark}.`
+    : "";
   if (rows === 0)
     throw new ProfileFileError(
       `${name} has no row of numbers with a decimal ${format.decimalMark}. It needs two columns: position and height.`,
     );
   if (skipped.length > rows / 2)
-    throw new ProfileFileError(`${name}: ${skipped.length} of ${rows} rows are no pair of numbers.${example} Check the decimal mark.`);
+    throw new ProfileFileError(
+      `${name}: ${skipped.length} of ${rows} rows are no pair of numbers.${example} Check the decimal mark.`,
+    );
   if (used < LEAST_POINTS)
-    throw new ProfileFileError(`${name} has ${used} usable rows; a curvature needs at least ${LEAST_POINTS}.${example}`);
+    throw new ProfileFileError(
+      `${name} has ${used} usable rows; a curvature needs at least ${LEAST_POINTS}.${example}`,
+    );
 }

@@ -28,7 +28,6 @@ export const securityHeaders: MiddlewareFunction<Response> = async ({ context },
   const response = await next();
   const { headers } = response;
   headers.set("Content-Security-Policy", contentSecurityPolicy(nonce));
-  headers.set("X-Content-Type-Options", "nosniff");
   headers.set("Referrer-Policy", "same-origin");
   headers.set("Cross-Origin-Opener-Policy", "same-origin");
   headers.set("Permissions-Policy", "camera=(), geolocation=(), microphone=()");

@@ -20,7 +20,8 @@ export const SITE_PERMISSIONS = {
 export type ProgramPermission = keyof typeof PROGRAM_PERMISSIONS;
 export type SitePermission = keyof typeof SITE_PERMISSIONS;
 
-const allows = (roles: readonly string[], held: string | null | undefined) => held != null && roles.includes(held);
+const allows = (roles: readonly string[], held: string | null | undefined) =>
+  typeof held === "string" && roles.includes(held);
 
 /**
  * Whether the actor may do this in that program. A site role counts only in programs that the person belongs to: a program

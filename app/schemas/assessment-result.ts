@@ -1,4 +1,12 @@
-import type { Exposure, FaceUp, Holding, Outcome, ShapeRegime, ShapeWord, SupportClass } from "#app/engine/vocabulary.ts";
+import type {
+  Exposure,
+  FaceUp,
+  Holding,
+  Outcome,
+  ShapeRegime,
+  ShapeWord,
+  SupportClass,
+} from "#app/engine/vocabulary.ts";
 import type { StepKind } from "#app/engine/flow/model.ts";
 import type { Finding } from "#app/engine/rules/finding.ts";
 import type { AssumedInput, Verdict } from "#app/engine/flow/assess.ts";

@@ -21,7 +21,10 @@ export const bondingMaterialSchema = z
     expansionBelow: measured(RULES.expansion),
     expansionAbove: measured(RULES.expansion),
     softening: optionalMeasured({ ...point, label: "softening point" }),
-    flows: z.boolean().optional().transform((checked) => checked ?? false),
+    flows: z
+      .boolean()
+      .optional()
+      .transform((checked) => checked ?? false),
     bondTemperature: measured({ ...point, label: "bond temperature" }),
     temperatureLimit: measured({ ...point, label: "temperature limit" }),
     leastThickness: quantity({ ...RULES.bondThickness, label: "least thickness" }),
@@ -43,7 +46,11 @@ export const bondingMaterialSchema = z
   })
   .superRefine(({ leastThickness, mostThickness, flows, softening }, context) => {
     if (mostThickness < leastThickness)
-      context.addIssue({ code: "custom", path: ["mostThickness"], message: "The most is less than the least thickness." });
+      context.addIssue({
+        code: "custom",
+        path: ["mostThickness"],
+        message: "The most is less than the least thickness.",
+      });
     if (flows && softening === null)
       context.addIssue({
         code: "custom",

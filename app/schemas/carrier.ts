@@ -4,7 +4,11 @@ import { measured, optionalMeasured, quantity } from "./quantity.ts";
 import { RULES } from "./ranges.ts";
 import { recordFields } from "./record-fields.ts";
 
-const limit = { ...RULES.temperature, label: "temperature limit", toleranceDimension: "temperatureDifference" } as const;
+const limit = {
+  ...RULES.temperature,
+  label: "temperature limit",
+  toleranceDimension: "temperatureDifference",
+} as const;
 
 export const carrierSchema = z
   .object({
@@ -15,13 +19,27 @@ export const carrierSchema = z
     youngsModulus: measured(RULES.modulus),
     poissonsRatio: measured(RULES.poissonsRatio),
     expansion: optionalMeasured(RULES.expansion),
-    expansionRange: z.string().trim().max(100).optional().transform((text) => text ?? ""),
+    expansionRange: z
+      .string()
+      .trim()
+      .max(100)
+      .optional()
+      .transform((text) => text ?? ""),
     density: measured(RULES.density),
     thicknessVariation: measured(RULES.thicknessVariation),
     temperatureLimit: measured(limit),
-    passesUltraviolet: z.boolean().optional().transform((checked) => checked ?? false),
-    passesInfrared: z.boolean().optional().transform((checked) => checked ?? false),
-    perforated: z.boolean().optional().transform((checked) => checked ?? false),
+    passesUltraviolet: z
+      .boolean()
+      .optional()
+      .transform((checked) => checked ?? false),
+    passesInfrared: z
+      .boolean()
+      .optional()
+      .transform((checked) => checked ?? false),
+    perforated: z
+      .boolean()
+      .optional()
+      .transform((checked) => checked ?? false),
     reuseLimit: z.number("Type how often it may be used.").int("Type a whole number.").min(1).max(10_000),
   })
   .superRefine(({ material, expansion }, context) => {

@@ -7,7 +7,12 @@ import { recordFields } from "./record-fields.ts";
 export const filmSchema = z.object({
   ...recordFields,
   kind: z.enum(FILM_KINDS, "Choose the kind of film."),
-  stressState: z.string().trim().max(200, "Keep it under 200 characters.").optional().transform((text) => text ?? ""),
+  stressState: z
+    .string()
+    .trim()
+    .max(200, "Keep it under 200 characters.")
+    .optional()
+    .transform((text) => text ?? ""),
   stress: measured(RULES.stress),
   youngsModulus: measured(RULES.modulus),
   poissonsRatio: measured(RULES.poissonsRatio),

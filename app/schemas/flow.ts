@@ -34,7 +34,10 @@ export const stepSchema = z
     peakTemperature: quantity({ ...RULES.temperature, label: "peak temperature" }),
     holdTime: optionalQuantity(RULES.holdTime),
     equipment: identifier,
-    exposures: z.array(z.enum(EXPOSURES)).optional().transform((list) => list ?? []),
+    exposures: z
+      .array(z.enum(EXPOSURES))
+      .optional()
+      .transform((list) => list ?? []),
     planned: z.enum(HOLDINGS, "Choose what holds the wafer."),
     siliconAfter: optionalMeasured({ ...RULES.siliconThickness, label: "silicon after the step", source: "assumed" }),
     trimWidth: optionalMeasured({ ...RULES.trimWidth, source: "assumed" }),
@@ -43,7 +46,11 @@ export const stepSchema = z
     bondingMaterial: identifier,
     bondThickness: optionalMeasured({ ...RULES.bondThickness, source: "assumed" }),
     groundFaceForce: optionalMeasured({ ...RULES.faceForce, source: "assumed" }),
-    films: z.array(filmChange).max(20, "A step changes at most 20 films.").optional().transform((list) => list ?? []),
+    films: z
+      .array(filmChange)
+      .max(20, "A step changes at most 20 films.")
+      .optional()
+      .transform((list) => list ?? []),
   })
   .superRefine((step, context) => {
     const fail = (path: (string | number)[], message: string) => context.addIssue({ code: "custom", path, message });

@@ -121,5 +121,8 @@ export function measured(rule: MeasuredRule) {
 
 /** A property that may be left blank. */
 export function optionalMeasured(rule: MeasuredRule) {
-  return measuredShape.transform((fields, context): Measured | null => toMeasured(fields, rule, context)).optional().transform((value) => value ?? null);
+  return measuredShape
+    .transform((fields, context): Measured | null => toMeasured(fields, rule, context))
+    .optional()
+    .transform((value) => value ?? null);
 }

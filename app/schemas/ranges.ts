@@ -36,17 +36,37 @@ export const RULES = {
   trimDepth: { label: "trim depth", dimension: "length", range: { least: 1e-6, most: 2e-3, words: "1 µm to 2 mm" } },
   rim: { label: "rim left out", dimension: "length", range: { least: 0, most: 0.05, words: "0 to 50 mm" } },
   stress: { label: "stress", dimension: "stress", range: { least: -1e10, most: 1e10, words: "−10 GPa to 10 GPa" } },
-  yieldStress: { label: "yield stress", dimension: "stress", range: { least: 1e5, most: 1e10, words: "0.1 MPa to 10 GPa" } },
+  yieldStress: {
+    label: "yield stress",
+    dimension: "stress",
+    range: { least: 1e5, most: 1e10, words: "0.1 MPa to 10 GPa" },
+  },
   modulus: { label: "modulus", dimension: "stress", range: { least: 1e4, most: 1.5e12, words: "10 kPa to 1500 GPa" } },
-  poissonsRatio: { label: "Poisson’s ratio", dimension: "number", range: { least: 0, most: 0.499, words: "0 to 0.499" } },
-  expansion: { label: "expansion", dimension: "expansion", range: { least: -2e-5, most: 1e-3, words: "−20 ppm/K to 1000 ppm/K" } },
+  poissonsRatio: {
+    label: "Poisson’s ratio",
+    dimension: "number",
+    range: { least: 0, most: 0.499, words: "0 to 0.499" },
+  },
+  expansion: {
+    label: "expansion",
+    dimension: "expansion",
+    range: { least: -2e-5, most: 1e-3, words: "−20 ppm/K to 1000 ppm/K" },
+  },
   temperature: {
     label: "temperature",
     dimension: "temperature",
     range: { least: 150, most: 1473.15, words: "−123 °C to 1200 °C" },
   },
-  density: { label: "density", dimension: "density", range: { least: 100, most: 30_000, words: "100 kg/m³ to 30 000 kg/m³" } },
-  coverage: { label: "area coverage", dimension: "fraction", range: { least: 1e-4, most: 1, words: "0.01 % to 100 %" } },
+  density: {
+    label: "density",
+    dimension: "density",
+    range: { least: 100, most: 30_000, words: "100 kg/m³ to 30 000 kg/m³" },
+  },
+  coverage: {
+    label: "area coverage",
+    dimension: "fraction",
+    range: { least: 1e-4, most: 1, words: "0.01 % to 100 %" },
+  },
   share: { label: "share", dimension: "fraction", range: { least: 0, most: 1, words: "0 to 100 %" } },
   holdTime: { label: "time at peak", dimension: "time", range: { least: 0, most: 2_592_000, words: "0 to 30 days" } },
   faceForce: {

@@ -15,4 +15,5 @@ export const recordFields = {
 export const versionField = z.coerce.number().int().optional();
 
 /** A whole number that may be missing. */
-export const optionalCount = (most: number) => z.number("Type a whole number.").int("Type a whole number.").min(0).max(most).optional();
+export const optionalCount = (most: number) =>
+  z.number("Type a whole number.").int("Type a whole number.").min(0).max(most).optional();

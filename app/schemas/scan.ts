@@ -14,7 +14,10 @@ export const scanSchema = z.object({
     .transform((id) => id || null),
   orientation: z.enum(["100", "111"], "Choose the orientation."),
   filmThickness: quantity(RULES.filmThickness),
-  filmThicknessTolerance: optionalQuantity({ ...RULES.filmThickness, range: { least: 0, most: 1e-3, words: "0 to 1 mm" } }),
+  filmThicknessTolerance: optionalQuantity({
+    ...RULES.filmThickness,
+    range: { least: 0, most: 1e-3, words: "0 to 1 mm" },
+  }),
   siliconThickness: quantity(RULES.siliconThickness),
   siliconThicknessTolerance: optionalQuantity({
     ...RULES.siliconThickness,

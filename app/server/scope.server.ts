@@ -17,6 +17,11 @@ export interface ActorScope {
   requestId: string;
 }
 
+/** Tells row-level security, for the rest of this transaction, whose data may be seen. */
+export async function tellPerson(em: EntityManager, personId: string | null): Promise<void> {
+  await em.execute("select set_config('app.person', ?, true)", [personId ?? ""]);
+}
+
 /**
  * The one door to the database: a manager of its own, one transaction, and the person told to row-level security, so that a
  * forgotten filter returns nothing. What `work` throws rolls everything back.
@@ -27,10 +32,8 @@ export async function inScope<T>(scope: Scope | ActorScope, work: (em: EntityMan
   const { em: shared } = await orm();
   const em = shared.fork({ clear: true });
   return em.transactional(async (transaction) => {
-    await transaction.execute("select set_config('app.person', ?, true), set_config('app.door', ?, true)", [
-      personId ?? "",
-      door,
-    ]);
+    await tellPerson(transaction, personId);
+    await transaction.execute("select set_config('app.door', ?, true)", [door]);
     noteScope(transaction, { personId, requestId: scope.requestId });
     return work(transaction as EntityManager);
   });

@@ -1,4 +1,9 @@
-import { OptimisticLockError, UniqueConstraintViolationException, type EntityManager, type EntityName } from "@mikro-orm/core";
+import {
+  OptimisticLockError,
+  UniqueConstraintViolationException,
+  type EntityManager,
+  type EntityName,
+} from "@mikro-orm/core";
 import { randomUUID } from "node:crypto";
 import type { Person } from "#app/db/entities/person.ts";
 import { notFound } from "#app/server/problem.server.ts";
@@ -22,7 +27,8 @@ export interface Conflict {
   version: number | null;
 }
 
-export type Saved = { outcome: "saved"; id: string } | { outcome: "conflict"; conflict: Conflict } | { outcome: "name taken" };
+export type Saved =
+  { outcome: "saved"; id: string } | { outcome: "conflict"; conflict: Conflict } | { outcome: "name taken" };
 
 /**
  * Runs a save and puts what the database itself refused into the same words: two people saving at the same moment get the same
@@ -57,7 +63,11 @@ export interface RecordStamp {
   updatedBy: string;
 }
 
-export function stampOf(record: { version: number; updatedAt: Date; updatedBy?: { name?: string } | null }): RecordStamp {
+export function stampOf(record: {
+  version: number;
+  updatedAt: Date;
+  updatedBy?: { name?: string } | null;
+}): RecordStamp {
   return {
     version: record.version,
     updatedAt: record.updatedAt.toISOString(),
@@ -81,7 +91,11 @@ export async function saveNamedRecord(
   entity: EntityName<EditableRecord>,
   what: string,
   scope: ActorScope,
-  { id, version, values }: { id: string | null; version: number | null; values: { name: string } & Record<string, unknown> },
+  {
+    id,
+    version,
+    values,
+  }: { id: string | null; version: number | null; values: { name: string } & Record<string, unknown> },
 ): Promise<Saved> {
   const namesake = await em.findOne(entity, { name: values.name });
   if (namesake && namesake.id !== id) return { outcome: "name taken" };

@@ -58,7 +58,11 @@ export function scanResult(values: ScanValues, before: ReadProfile, after: ReadP
 }
 
 /** Both scans and their difference on the positions of the first, levelled at the middle, thinned for drawing. */
-function drawnCurve(before: ReadProfile["points"], after: ReadProfile["points"], curvature: number): ScanResult["curve"] {
+function drawnCurve(
+  before: ReadProfile["points"],
+  after: ReadProfile["points"],
+  curvature: number,
+): ScanResult["curve"] {
   const second = after.toSorted((a, b) => a.x - b.x);
   const first = before.toSorted((a, b) => a.x - b.x);
   const [low, high] = [second[0]?.x ?? 0, second.at(-1)?.x ?? 0];
@@ -74,7 +78,10 @@ function drawnCurve(before: ReadProfile["points"], after: ReadProfile["points"],
     return { x: x - middle, before: z, after: z2, difference: z2 - z };
   });
   const level = levelOf(raw.map(({ x, difference }) => ({ x, z: difference - (curvature * x * x) / 2 })));
-  return raw.map((point) => ({ ...point, fitted: level.offset + level.slope * point.x + (curvature * point.x * point.x) / 2 }));
+  return raw.map((point) => ({
+    ...point,
+    fitted: level.offset + level.slope * point.x + (curvature * point.x * point.x) / 2,
+  }));
 }
 
 /** Straight line through what the parabola leaves, so that the fit lies on the difference. */

@@ -24,8 +24,7 @@ export interface UploadedFile {
 }
 
 export type Uploaded =
-  | { outcome: "stored"; id: string }
-  | { outcome: "refused"; field: "before" | "after" | "form"; reason: string };
+  { outcome: "stored"; id: string } | { outcome: "refused"; field: "before" | "after" | "form"; reason: string };
 
 /**
  * Reads two profiles, computes the film's stress and stores raw files, inputs and result in one transaction. A pair that cannot be
@@ -78,7 +77,12 @@ export async function uploadScan(
 }
 
 /** The same bytes are kept once in a program, under the name they first came with. */
-async function keepFile(em: EntityManager, scope: ActorScope, programId: string, file: UploadedFile): Promise<ScanFile> {
+async function keepFile(
+  em: EntityManager,
+  scope: ActorScope,
+  programId: string,
+  file: UploadedFile,
+): Promise<ScanFile> {
   const hash = createHash("sha256").update(file.bytes).digest("hex");
   const known = await em.findOne(ScanFile, { program: programId, hash });
   if (known) return known;
@@ -139,19 +143,17 @@ export async function listScans(scope: ActorScope, params: ListParams): Promise<
         offset: (params.page - 1) * PAGE_SIZE,
       },
     );
-    const rows = scans.map(
-      (scan): ScanRow => ({
-        id: scan.id,
-        label: scan.label,
-        program: scan.program.name,
-        film: scan.film?.name ?? null,
-        stress: scan.result.stress,
-        stressUncertainty: scan.result.stressUncertainty,
-        bowChange: scan.result.bowChange,
-        createdAt: scan.createdAt.toISOString(),
-        createdBy: scan.createdBy.name,
-      }),
-    );
+    const rows = scans.map((scan): ScanRow => ({
+      id: scan.id,
+      label: scan.label,
+      program: scan.program.name,
+      film: scan.film?.name ?? null,
+      stress: scan.result.stress,
+      stressUncertainty: scan.result.stressUncertainty,
+      bowChange: scan.result.bowChange,
+      createdAt: scan.createdAt.toISOString(),
+      createdBy: scan.createdBy.name,
+    }));
     return { rows, total, params };
   });
 }
@@ -204,13 +206,12 @@ export async function getScan(scope: ActorScope, id: string | undefined): Promis
 }
 
 /** The raw bytes of a file, exactly as they came. */
-export async function getScanFile(scope: ActorScope, id: string | undefined): Promise<{ name: string; bytes: Uint8Array }> {
+export async function getScanFile(
+  scope: ActorScope,
+  id: string | undefined,
+): Promise<{ name: string; bytes: Uint8Array }> {
   return inScope(scope, async (em) => {
-    const file = await em.findOne(
-      ScanFile,
-      { id: idFrom(id, "scan file") },
-      { populate: ["program", "bytes"] },
-    );
+    const file = await em.findOne(ScanFile, { id: idFrom(id, "scan file") }, { populate: ["program", "bytes"] });
     if (!file) throw notFound("scan file");
     requireInProgram(scope, "see the work", file.program.id, "scan file");
     return { name: file.name, bytes: new Uint8Array(file.bytes.get()) };

@@ -2,7 +2,7 @@ import { createHash, randomBytes, randomUUID } from "node:crypto";
 import { Membership } from "#app/db/entities/membership.ts";
 import { Session } from "#app/db/entities/session.ts";
 import type { Actor } from "#app/policies/roles.ts";
-import { inScope } from "#app/server/scope.server.ts";
+import { inScope, tellPerson } from "#app/server/scope.server.ts";
 
 const MINUTE = 60_000;
 /** A session ends after this long without use, and after this long whatever happens. */
@@ -72,6 +72,7 @@ export async function resumeSession(
       renewed = { token: next, expiresAt: session.expiresAt };
     }
     if (session.lastSeenAt.getTime() + NOTE_USE_AFTER <= now) session.lastSeenAt = new Date(now);
+    await tellPerson(em, session.person.id);
     const memberships = await em.find(Membership, { person: session.person.id }, { populate: ["program"] });
     await em.flush();
     const { id, name, email, siteRole } = session.person;

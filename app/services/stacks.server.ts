@@ -155,7 +155,10 @@ export async function listStacks(scope: ActorScope, params: ListParams): Promise
         offset: (params.page - 1) * PAGE_SIZE,
       },
     );
-    const layers = await layersByStack(em, stacks.map(({ id }) => id));
+    const layers = await layersByStack(
+      em,
+      stacks.map(({ id }) => id),
+    );
     const rows = stacks.map((stack): StackRow => {
       const detail = detailOf(stack, layers.get(stack.id) ?? [], scope);
       return {

@@ -19,12 +19,12 @@ import {
   type PlotScales,
   type PlotTick,
 } from "../drawings/plot.ts";
-import { plotFrame } from "../drawings/plotFrame.ts";
+import { plotFrame } from "../drawings/plot-frame.ts";
 import { PlotOver } from "../drawings/PlotOver.tsx";
-import { plotScale } from "../drawings/plotScale.ts";
+import { plotScale } from "../drawings/plot-scale.ts";
 import { PlotUnder } from "../drawings/PlotUnder.tsx";
-import { roomyTicks } from "../drawings/roomyTicks.ts";
-import { axisValue } from "./axisValue.ts";
+import { roomyTicks } from "../drawings/roomy-ticks.ts";
+import { axisValue } from "./axis-value.ts";
 import { PlotCursor } from "./PlotCursor.tsx";
 import { PlotReadOut } from "./PlotReadOut.tsx";
 

@@ -1,6 +1,6 @@
 import { colour } from "../drawings/colour.ts";
 import type { Plot, PlotFrame, PlotScales } from "../drawings/plot.ts";
-import { seriesValue } from "../drawings/seriesValue.ts";
+import { seriesValue } from "../drawings/series-value.ts";
 
 export interface PlotCursorProps {
   plot: Plot;

@@ -1,7 +1,7 @@
 import type { Plot, PlotFrame } from "../drawings/plot.ts";
-import { plotScale } from "../drawings/plotScale.ts";
-import { seriesValue } from "../drawings/seriesValue.ts";
-import { axisValue } from "./axisValue.ts";
+import { plotScale } from "../drawings/plot-scale.ts";
+import { seriesValue } from "../drawings/series-value.ts";
+import { axisValue } from "./axis-value.ts";
 
 export interface PlotReadOutProps {
   plot: Plot;

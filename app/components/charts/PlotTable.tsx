@@ -1,5 +1,5 @@
 import type { Plot } from "../drawings/plot.ts";
-import { seriesValue } from "../drawings/seriesValue.ts";
+import { seriesValue } from "../drawings/series-value.ts";
 
 export interface PlotTableProps {
   plot: Plot;

@@ -1,4 +1,4 @@
-import { profilePlot, type ProfilePlotInput } from "../drawings/profilePlot.ts";
+import { profilePlot, type ProfilePlotInput } from "../drawings/profile-plot.ts";
 import { ChartFigure } from "./ChartFigure.tsx";
 
 export interface ProfileChartProps {

@@ -1,4 +1,4 @@
-import { warpPlot, type WarpPlotInput } from "../drawings/warpPlot.ts";
+import { warpPlot, type WarpPlotInput } from "../drawings/warp-plot.ts";
 import { ChartFigure } from "./ChartFigure.tsx";
 
 export interface WarpChartProps {

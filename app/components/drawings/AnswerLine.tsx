@@ -1,7 +1,7 @@
 import type { ReactNode } from "react";
 import type { Outcome } from "#app/engine/vocabulary.ts";
 import { FindingTag } from "./FindingTag.tsx";
-import { noBreak } from "./noBreak.ts";
+import { noBreak } from "./no-break.ts";
 
 export interface AnswerFigure {
   label: string;

@@ -1,9 +1,9 @@
 import type { Holding } from "#app/engine/vocabulary.ts";
-import { bandPath, linePath, offsetCurve, type BowCurve } from "./bowCurve.ts";
-import { drawBow, type BowShape } from "./bowShape.ts";
+import { bandPath, linePath, offsetCurve, type BowCurve } from "./bow-curve.ts";
+import { drawBow, type BowShape } from "./bow-shape.ts";
 import { colour } from "./colour.ts";
 import { coordinate } from "./coordinate.ts";
-import { textWidth } from "./textWidth.ts";
+import { textWidth } from "./text-width.ts";
 
 export interface BowFigureProps {
   /** Wafer diameter, m. */

@@ -14,7 +14,8 @@ export interface BowLineProps extends Omit<BowFigureProps, "x" | "y"> {
 export function BowLine({ label, ...figure }: BowLineProps) {
   return (
     <svg
-      className="block overflow-visible"
+      className="block h-auto max-w-full overflow-visible"
+      viewBox={`0 0 ${figure.width} ${figure.height}`}
       width={figure.width}
       height={figure.height}
       role={label === "" ? undefined : "img"}

@@ -3,8 +3,8 @@ import { colour } from "./colour.ts";
 import { coordinate } from "./coordinate.ts";
 import { CutBand } from "./CutBand.tsx";
 import { CutKey } from "./CutKey.tsx";
-import type { CutLayer } from "./cutLayer.ts";
-import { CUT, cutLayout, labelBaselines, NAME_SIZE, type CutPlace } from "./cutLayout.ts";
+import type { CutLayer } from "./cut-layer.ts";
+import { CUT, cutLayout, labelBaselines, NAME_SIZE, type CutPlace } from "./cut-layout.ts";
 import { CutPart } from "./CutPart.tsx";
 
 /** The words at one end of the cut, with the link that adds a film there. */

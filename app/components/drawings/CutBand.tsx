@@ -1,7 +1,7 @@
 import { colour } from "./colour.ts";
 import { coordinate } from "./coordinate.ts";
-import type { CutLayer } from "./cutLayer.ts";
-import { CUT } from "./cutLayout.ts";
+import type { CutLayer } from "./cut-layer.ts";
+import { CUT } from "./cut-layout.ts";
 import { CutMaterial } from "./CutMaterial.tsx";
 
 export interface CutBandProps {

@@ -1,6 +1,6 @@
 import { colour } from "./colour.ts";
 import { coordinate } from "./coordinate.ts";
-import { CUT, layerHeight } from "./cutLayout.ts";
+import { CUT, layerHeight } from "./cut-layout.ts";
 
 /** Four bars that show how height goes with thickness, at 0.4 of the drawn height, and what the arrows mean. */
 export function CutKey({ y }: { y: number }) {

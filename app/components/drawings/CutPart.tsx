@@ -1,6 +1,6 @@
 import type { KeyboardEvent, ReactNode } from "react";
-import type { CutLayer } from "./cutLayer.ts";
-import { selectInPlace } from "./selectInPlace.ts";
+import type { CutLayer } from "./cut-layer.ts";
+import { selectInPlace } from "./select-in-place.ts";
 
 export interface CutPartProps {
   layer: CutLayer;

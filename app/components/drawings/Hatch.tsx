@@ -1,5 +1,5 @@
 import { colour } from "./colour.ts";
-import { hatchPath } from "./hatchPath.ts";
+import { hatchPath } from "./hatch-path.ts";
 import { HATCH_STYLES, type HatchLevel } from "./severity.ts";
 
 export interface HatchProps {

@@ -1,13 +1,13 @@
 import type { CSSProperties } from "react";
-import { alongLabel } from "./alongLabel.ts";
+import { alongLabel } from "./along-label.ts";
 import { colour } from "./colour.ts";
 import { coordinate } from "./coordinate.ts";
-import { limitLabels } from "./limitLabels.ts";
+import { limitLabels } from "./limit-labels.ts";
 import type { Plot, PlotFrame, PlotScales } from "./plot.ts";
 import { PlotMarker } from "./PlotMarker.tsx";
-import { seriesValue } from "./seriesValue.ts";
-import { spreadLabels } from "./spreadLabels.ts";
-import { textWidth } from "./textWidth.ts";
+import { seriesValue } from "./series-value.ts";
+import { spreadLabels } from "./spread-labels.ts";
+import { textWidth } from "./text-width.ts";
 
 export interface PlotOverProps {
   plot: Plot;

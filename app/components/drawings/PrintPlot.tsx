@@ -1,12 +1,12 @@
 import { colour } from "./colour.ts";
 import { coordinate } from "./coordinate.ts";
 import { PLOT_DASHES, type Plot, type PlotFrame, type PlotScales } from "./plot.ts";
-import { plotFrame } from "./plotFrame.ts";
+import { plotFrame } from "./plot-frame.ts";
 import { PlotOver } from "./PlotOver.tsx";
-import { plotScale } from "./plotScale.ts";
+import { plotScale } from "./plot-scale.ts";
 import { PlotUnder } from "./PlotUnder.tsx";
-import { roomyTicks } from "./roomyTicks.ts";
-import { seriesPath } from "./seriesPath.ts";
+import { roomyTicks } from "./roomy-ticks.ts";
+import { seriesPath } from "./series-path.ts";
 
 export interface PrintPlotProps {
   plot: Plot;

@@ -1,11 +1,11 @@
 import type { Outcome } from "#app/engine/vocabulary.ts";
 import { BowFigure } from "./BowFigure.tsx";
 import { colour, type ColourToken } from "./colour.ts";
-import { plannedRowsHeight } from "./plannedSpans.ts";
-import { selectInPlace } from "./selectInPlace.ts";
+import { plannedRowsHeight } from "./planned-spans.ts";
+import { selectInPlace } from "./select-in-place.ts";
 import { HATCH_STYLES, OUTCOME_SIGNS } from "./severity.ts";
 import { StripScales } from "./StripScales.tsx";
-import type { StripStep } from "./stripStep.ts";
+import type { StripStep } from "./strip-step.ts";
 import { SupportPlanned } from "./SupportPlanned.tsx";
 import { SupportRequired } from "./SupportRequired.tsx";
 

@@ -1,8 +1,8 @@
 import { colour } from "./colour.ts";
 import { coordinate } from "./coordinate.ts";
-import type { StripStep } from "./stripStep.ts";
-import { textWidth } from "./textWidth.ts";
-import { wrapText } from "./wrapText.ts";
+import type { StripStep } from "./strip-step.ts";
+import { textWidth } from "./text-width.ts";
+import { wrapText } from "./wrap-text.ts";
 
 export interface StripScalesProps {
   steps: readonly StripStep[];

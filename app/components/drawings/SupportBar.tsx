@@ -1,10 +1,10 @@
 import type { Outcome, SupportClass } from "#app/engine/vocabulary.ts";
 import { colour } from "./colour.ts";
-import { plannedRowsHeight } from "./plannedSpans.ts";
-import { runsOf } from "./runsOf.ts";
+import { plannedRowsHeight } from "./planned-spans.ts";
+import { runsOf } from "./runs-of.ts";
 import { SUPPORT_SIGNS } from "./severity.ts";
-import { stackRows } from "./stackRows.ts";
-import { textWidth } from "./textWidth.ts";
+import { stackRows } from "./stack-rows.ts";
+import { textWidth } from "./text-width.ts";
 import { SupportPlanned } from "./SupportPlanned.tsx";
 import { SupportRequired } from "./SupportRequired.tsx";
 

@@ -1,7 +1,7 @@
 import { colour } from "./colour.ts";
 import { coordinate } from "./coordinate.ts";
-import { PLANNED_ROW_PITCH, plannedSpans } from "./plannedSpans.ts";
-import { textWidth } from "./textWidth.ts";
+import { PLANNED_ROW_PITCH, plannedSpans } from "./planned-spans.ts";
+import { textWidth } from "./text-width.ts";
 
 export interface SupportPlannedProps {
   /** One entry per step: what is planned to hold the wafer, in words; null where it is bare. */

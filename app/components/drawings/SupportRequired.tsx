@@ -1,9 +1,9 @@
 import type { Outcome, SupportClass } from "#app/engine/vocabulary.ts";
 import { colour } from "./colour.ts";
 import { HatchBox } from "./HatchBox.tsx";
-import { runsOf } from "./runsOf.ts";
+import { runsOf } from "./runs-of.ts";
 import { OUTCOME_SIGNS, SUPPORT_SIGNS, type HatchLevel } from "./severity.ts";
-import { textWidth } from "./textWidth.ts";
+import { textWidth } from "./text-width.ts";
 
 export interface SupportRequiredProps {
   /** One entry per step. */

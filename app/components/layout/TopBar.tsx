@@ -11,14 +11,15 @@ interface Props {
 export function TopBar({ person, places }: Props) {
   return (
     <header className="screen-only mx-auto max-w-page px-4 tablet:px-6">
-      <a
-        href="#main"
-        className="btn btn-primary absolute top-2 left-2 z-10 -translate-y-20 focus:translate-y-0"
-      >
+      <a href="#main" className="btn btn-primary absolute top-2 left-2 z-10 -translate-y-20 focus:translate-y-0">
         Skip to content
       </a>
       <div className="flex min-h-12 flex-wrap items-center gap-x-6 gap-y-1 py-1">
-        <Link to="/" className="flex items-center gap-2 text-lead font-semibold no-underline" aria-label="Planeward, Today">
+        <Link
+          to="/"
+          className="flex items-center gap-2 text-lead font-semibold no-underline"
+          aria-label="Planeward, Today"
+        >
           <Mark />
           <span>Planeward</span>
         </Link>

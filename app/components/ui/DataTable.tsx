@@ -41,7 +41,11 @@ export function DataTable<Row>({ caption, columns, page, rowKey }: Props<Row>) {
                 return (
                   <th key={column.key} scope="col" className={align(column)} aria-sort={order}>
                     {column.sortable ? (
-                      <Link to={withParams(search, { sort: next, page: null })} className="text-inherit no-underline" preventScrollReset>
+                      <Link
+                        to={withParams(search, { sort: next, page: null })}
+                        className="text-inherit no-underline"
+                        preventScrollReset
+                      >
                         {column.head}
                         {current && <SortSign descending={params.descending} />}
                       </Link>

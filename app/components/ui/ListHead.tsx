@@ -12,7 +12,12 @@ export function ListHead({ what, filters = [], children }: { what: string; filte
   const [search] = useSearchParams();
   const id = useId();
   return (
-    <Form method="get" role="search" className="screen-only mb-4 flex flex-wrap items-end gap-3" key={search.toString()}>
+    <Form
+      method="get"
+      role="search"
+      className="screen-only mb-4 flex flex-wrap items-end gap-3"
+      key={search.toString()}
+    >
       <div className="field w-64">
         <label htmlFor={id}>Search {what}</label>
         <input id={id} type="search" name="q" defaultValue={search.get("q") ?? ""} />

@@ -22,12 +22,54 @@ const ALL = ["tern", "petrel", "fulmar"];
 const at = (account: string) => `${account}@kestrel-ridge.example`;
 
 export const DEMO_PEOPLE: DemoPerson[] = [
-  { role: "engineer", email: at("engineer"), name: "Ines Varga", siteRole: null, programRole: "engineer", programs: ALL },
-  { role: "technician", email: at("technician"), name: "Jude Okafor", siteRole: null, programRole: "technician", programs: ALL },
-  { role: "shift lead", email: at("shift-lead"), name: "Sanna Brandt", siteRole: "shift lead", programRole: "technician", programs: ALL },
-  { role: "process owner", email: at("process-owner"), name: "Mikael Lindqvist", siteRole: null, programRole: "process owner", programs: ALL },
-  { role: "process owner", email: at("second-process-owner"), name: "Ana Prado", siteRole: null, programRole: "process owner", programs: ALL },
-  { role: "administrator", email: at("administrator"), name: "Tomas Reyl", siteRole: "administrator", programRole: "guest", programs: ALL },
+  {
+    role: "engineer",
+    email: at("engineer"),
+    name: "Ines Varga",
+    siteRole: null,
+    programRole: "engineer",
+    programs: ALL,
+  },
+  {
+    role: "technician",
+    email: at("technician"),
+    name: "Jude Okafor",
+    siteRole: null,
+    programRole: "technician",
+    programs: ALL,
+  },
+  {
+    role: "shift lead",
+    email: at("shift-lead"),
+    name: "Sanna Brandt",
+    siteRole: "shift lead",
+    programRole: "technician",
+    programs: ALL,
+  },
+  {
+    role: "process owner",
+    email: at("process-owner"),
+    name: "Mikael Lindqvist",
+    siteRole: null,
+    programRole: "process owner",
+    programs: ALL,
+  },
+  {
+    role: "process owner",
+    email: at("second-process-owner"),
+    name: "Ana Prado",
+    siteRole: null,
+    programRole: "process owner",
+    programs: ALL,
+  },
+  {
+    role: "administrator",
+    email: at("administrator"),
+    name: "Tomas Reyl",
+    siteRole: "administrator",
+    programRole: "guest",
+    programs: ALL,
+  },
   { role: "guest", email: at("guest"), name: "Lea Winter", siteRole: null, programRole: "guest", programs: ["tern"] },
 ];
 

@@ -49,7 +49,12 @@ export async function addDemoFlow(em: EntityManager, program: Program, films: Ma
       groundFaceForce:
         step.groundFaceForce === undefined
           ? null
-          : measured(step.groundFaceForce, Math.abs(step.groundFaceForce) / 2, "handbook", "common practice, no source"),
+          : measured(
+              step.groundFaceForce,
+              Math.abs(step.groundFaceForce) / 2,
+              "handbook",
+              "common practice, no source",
+            ),
     });
     addStepFilms(em, program, entity, step, films);
   }
@@ -81,7 +86,9 @@ function addStepFilms(
       side: change.side,
       film: change.film,
       thickness:
-        change.change === "adds" ? measured(change.thickness * 1e-6, change.thickness * 0.03e-6, "measured here") : null,
+        change.change === "adds"
+          ? measured(change.thickness * 1e-6, change.thickness * 0.03e-6, "measured here")
+          : null,
       stress: change.change === "adds" ? stressFor(change.film, change.stress) : null,
       coverage: change.change === "adds" ? change.coverage : 1,
     });

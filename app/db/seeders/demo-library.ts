@@ -13,7 +13,8 @@ const MEASURED_ON = "2026-10-21";
 export function addDemoLibrary(em: EntityManager): void {
   for (const film of DEMO_FILMS) {
     const on = film.source === "measured here" ? MEASURED_ON : null;
-    const property = (value: number, tolerance: number | null) => measured(value, tolerance, film.source, film.note, on);
+    const property = (value: number, tolerance: number | null) =>
+      measured(value, tolerance, film.source, film.note, on);
     em.create(Film, {
       ...delivered(),
       name: film.name,

@@ -1,7 +1,7 @@
 import { EngineInputError } from "../errors.ts";
 import { requireCurvature, requireModulus, requireRadius, requireThickness, requireWithin } from "../inputs.ts";
 import { requireOrientation, type Orientation } from "../silicon/orientation.ts";
-import { bowFromCurvature } from "../stoney/bow.ts";
+import { arcSagitta } from "../stoney/bow.ts";
 import type { ShapeRegime } from "../vocabulary.ts";
 import { loadRatio, plateShape, type PlateKind } from "./shape-model.ts";
 import type { CurvaturePair } from "./uniform-curvature.ts";
@@ -81,7 +81,7 @@ export function freeWaferShape(i: FreeWaferShapeInput): FreeWaferShape {
   const swapped = Math.abs(alongX(shape.bow)) < Math.abs(alongY(shape.bow));
   const major = swapped ? alongY : alongX;
   const minor = swapped ? alongX : alongY;
-  const sagitta = (curvature: number) => bowFromCurvature({ curvature: curvature * scale, radius, exact: true });
+  const sagitta = (curvature: number) => arcSagitta(curvature * scale, radius);
   const bowMajor = sagitta(major(shape.bow));
   const bowMinor = sagitta(minor(shape.bow));
   const stabilityRatio = loadRatio(load, kind);

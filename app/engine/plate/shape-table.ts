@@ -50,9 +50,8 @@ const ROWS: readonly Row[] = [
 ];
 
 /**
- * The factors at `load`, mean load over critical load. Interpolated linearly in the load up to the onset and in arcosh(load)
- * beyond it, which grows as the square root of the excess at the onset and as the logarithm far from it, as the shape does.
- * Beyond the last row the departure from uniform curvature shrinks as 1/sqrt(load), the width of the bent rim.
+ * The factors at `load`, load over critical load. Interpolated linearly in the load up to the onset and in its logarithm
+ * beyond it. Beyond the last row the departure from uniform curvature shrinks as 1/sqrt(load), the width of the bent rim.
  */
 export function shapeFactors(load: number): ShapeFactors {
   const position = scale(load);
@@ -67,7 +66,7 @@ export function shapeFactors(load: number): ShapeFactors {
 }
 
 function scale(load: number): number {
-  return load <= 1 ? load : 1 + Math.acosh(load);
+  return load <= 1 ? load : 1 + Math.log(load);
 }
 
 function between(low: Row, high: Row, position: number): ShapeFactors {

@@ -65,7 +65,8 @@ export function snappedState(load: CurvaturePair, c: PlateCoefficients): Curvatu
   if (a === 0) return withSigns(magnitudes(0, d, c), load, -1);
   const product = snappedProduct(a, d, c);
   if (product === null) return null;
-  return withSigns({ mean: -a / (1 + c.alpha * product), halfDifference: d / (1 - c.beta * product) }, load, -1);
+  const halfDifference = d / (1 - c.beta * product);
+  return withSigns({ mean: meanFrom(a, product, halfDifference, c), halfDifference }, load, -1);
 }
 
 function withSigns(size: CurvaturePair, load: CurvaturePair, meanSign: 1 | -1): CurvaturePair {
@@ -87,15 +88,20 @@ function magnitudes(a: number, d: number, c: PlateCoefficients): CurvaturePair {
   // Falls from +infinity to −infinity between P = −1/α and P = 1/β, so bisection finds its one root.
   const residual = (p: number) => (a / (1 + alpha * p)) ** 2 - (d / (1 - beta * p)) ** 2 - p;
   const product = bisect(residual, -1 / alpha, 1 / beta);
-  // Near either end a factor below is a difference of almost equal numbers: take that part from P = A² − D² instead.
-  const stretch = 1 + alpha * product;
   const drive = 1 - beta * product;
   if (drive < 1e-3) {
-    const mean = a / stretch;
+    // The same for D near the other end: from D² = A² − P.
+    const mean = a / (1 + alpha * product);
     return { mean, halfDifference: Math.sqrt(Math.max(0, mean * mean - product)) };
   }
   const halfDifference = d / drive;
-  return { mean: stretch < 1e-3 ? Math.sqrt(Math.max(0, product + halfDifference ** 2)) : a / stretch, halfDifference };
+  return { mean: meanFrom(a, product, halfDifference, c), halfDifference };
+}
+
+/** |A| from A (1 + α P) = A_0, or from A² = P + D² where the bracket is a difference of almost equal numbers. */
+function meanFrom(a: number, product: number, halfDifference: number, { alpha }: PlateCoefficients): number {
+  const stretch = Math.abs(1 + alpha * product);
+  return stretch < 1e-3 ? Math.sqrt(Math.max(0, product + halfDifference ** 2)) : a / stretch;
 }
 
 /** Root of a falling function between two ends at which it may be infinite, or the end nearest to it. */

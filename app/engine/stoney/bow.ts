@@ -14,7 +14,8 @@ export function bowFromCurvature(i: { curvature: number; radius: number; exact?:
   return i.exact ? arcSagitta(curvature, radius) : (curvature * radius * radius) / 2;
 }
 
-function arcSagitta(curvature: number, radius: number): number {
+/** Height of the rim over the centre of an arc, m, for inputs that have been checked; 2/κ from half a turn on. */
+export function arcSagitta(curvature: number, radius: number): number {
   const angle = Math.min(Math.abs(curvature) * radius, Math.PI);
   if (angle === 0) return 0;
   // 2 sin²(a/2) is 1 − cos a without its loss of digits at small angles.

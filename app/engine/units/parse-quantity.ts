@@ -56,7 +56,7 @@ export function parseQuantity(
   const { name, least }: DimensionDefinition = DIMENSIONS[dimension];
   if (!Number.isFinite(si)) return fault("out-of-range", `“${typed}”: that is too large for a ${name}.`);
   if (least !== undefined && si < least) {
-    const floor = showQuantity(fromSi(least, unit, dimension), unit.symbol, {});
+    const floor = showQuantity(fromSi(least, unit, dimension), unit.symbol, { significant: 5, trim: true });
     return fault("out-of-range", `“${typed}”: the lowest ${name} is ${floor}.`);
   }
   return {

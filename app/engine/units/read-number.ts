@@ -5,8 +5,11 @@ export type NumberReading =
   | { ok: true; value: number; rest: string }
   | { ok: false; code: "not-a-number" | "ambiguous" | "decimal-mark"; message: string };
 
-/** Sign, digits with marks and blanks, power of ten, and what follows. */
-const LEADING_NUMBER = /^([+-]?)\s*((?:\d[\d., ]*)?\d|[.,]\d+|\d[.,])(?:[eE]([+-]?\d+))?(.*)$/;
+/**
+ * Sign, digits with marks and blanks between them, power of ten, and what follows. A blank before '1/' ends the number, because
+ * the unit begins there: 5 1/m.
+ */
+const LEADING_NUMBER = /^([+-]?) ?([.,]?\d(?:\d|[.,](?=\d)| (?=\d)(?!1\/))*[.,]?)(?:[eE]([+-]?\d+))?(.*)$/;
 
 /** Groups of three set apart by one mark: 1 200, 1,234,567. */
 const grouped = (mark: string) => new RegExp(`^\\d{1,3}(?:\\${mark}\\d{3})+$`);

@@ -6,6 +6,7 @@ import { localPath } from "#app/lib/local-path.ts";
 import { authenticator, signInSchema, SignInRefused } from "#app/server/authenticator.server.ts";
 import { actorContext, requestIdContext } from "#app/server/contexts.server.ts";
 import { sessionCookie } from "#app/server/session-cookie.server.ts";
+import { thinningStory } from "#app/services/thinning-story.server.ts";
 import { startSession } from "#app/services/sessions.server.ts";
 import type { Route } from "./+types/sign-in";
 
@@ -13,7 +14,7 @@ export const meta: Route.MetaFunction = () => [{ title: "Sign in · Planeward" }
 
 export function loader({ context, url }: Route.LoaderArgs) {
   if (context.get(actorContext)) throw redirect(localPath(url.searchParams.get("next")));
-  return null;
+  return thinningStory();
 }
 
 export async function action({ request, context, url }: Route.ActionArgs) {
@@ -23,30 +24,38 @@ export async function action({ request, context, url }: Route.ActionArgs) {
     return data({ errors: errors as Record<string, string>, email: "" }, { status: 400 });
   }
   try {
-    const personId = await authenticator.authenticate("form", request);
-    const started = await startSession(personId, request.headers.get("User-Agent") ?? "", context.get(requestIdContext));
+    const requestId = context.get(requestIdContext);
+    const headers = new Headers(request.headers);
+    headers.set("X-Request-Id", requestId);
+    const personId = await authenticator.authenticate("form", new Request(request, { headers }));
+    const started = await startSession(personId, request.headers.get("User-Agent") ?? "", requestId);
     throw redirect(localPath(url.searchParams.get("next")), {
       headers: { "Set-Cookie": await sessionCookie(request, started) },
     });
   } catch (error) {
     if (!(error instanceof SignInRefused)) throw error;
-    return data({ errors: { form: error.message } as Record<string, string>, email: parsed.data.email }, { status: 400 });
+    return data(
+      { errors: { form: error.message } as Record<string, string>, email: parsed.data.email },
+      { status: 400 },
+    );
   }
 }
 
-export default function SignIn({ actionData }: Route.ComponentProps) {
+export default function SignIn({ actionData, loaderData }: Route.ComponentProps) {
   const busy = useNavigation().state !== "idle";
   const errors = actionData?.errors;
   return (
     <main id="main" className="mx-auto max-w-page p-4 tablet:p-6">
       <div className="frame grid wide:grid-cols-[1fr_420px]">
-        <ThinningStory />
+        <ThinningStory {...loaderData} />
         <div className="flex flex-col border-ink max-wide:border-t wide:border-l">
           <div className="grow p-6">
             <p className="flex items-center gap-2 text-figure font-semibold">
               <Mark /> Planeward
             </p>
-            <h1 className="mt-6 text-answer font-medium">Flat and strong enough for every step, before any silicon is committed.</h1>
+            <h1 className="mt-6 text-answer font-medium">
+              Flat and strong enough for every step, before any silicon is committed.
+            </h1>
           </div>
           <Form method="post" className="border-t border-ink" aria-label="Sign in">
             {errors?.["form"] && (
@@ -55,10 +64,25 @@ export default function SignIn({ actionData }: Route.ComponentProps) {
               </p>
             )}
             <div className="border-b border-line px-6 py-3">
-              <TextField name="email" label="E-mail" type="email" autoComplete="username" required defaultValue={actionData?.email} error={errors?.["email"]} />
+              <TextField
+                name="email"
+                label="E-mail"
+                type="email"
+                autoComplete="username"
+                required
+                defaultValue={actionData?.email}
+                error={errors?.["email"]}
+              />
             </div>
             <div className="border-b border-line px-6 py-3">
-              <TextField name="password" label="Password" type="password" autoComplete="current-password" required error={errors?.["password"]} />
+              <TextField
+                name="password"
+                label="Password"
+                type="password"
+                autoComplete="current-password"
+                required
+                error={errors?.["password"]}
+              />
             </div>
             <div className="px-6 py-4">
               <button type="submit" className="btn btn-primary w-full" disabled={busy}>

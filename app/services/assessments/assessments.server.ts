@@ -20,7 +20,8 @@ import { idFrom } from "../uuid.server.ts";
 import { resultOf } from "./result-of.ts";
 
 /** What running an assessment came to: the stored one, or the sentence that says why nothing could be computed. */
-export type Ran = { outcome: "stored"; id: string } | { outcome: "not computable"; step: number | null; reason: string };
+export type Ran =
+  { outcome: "stored"; id: string } | { outcome: "not computable"; step: number | null; reason: string };
 
 /**
  * Assesses a flow as it is now and stores inputs, engine version and results together. What cannot be computed is stored
@@ -161,19 +162,17 @@ export async function listAssessments(
         offset: (params.page - 1) * PAGE_SIZE,
       },
     );
-    const rows = assessments.map(
-      (assessment): AssessmentRow => ({
-        id: assessment.id,
-        number: assessment.number,
-        flow: assessment.flowName,
-        program: assessment.program.name,
-        outcome: assessment.outcome,
-        sentence: assessment.result.sentences.join(" "),
-        createdAt: assessment.createdAt.toISOString(),
-        createdBy: assessment.createdBy.name,
-        outOfDate: assessment.flow.updatedAt > assessment.createdAt,
-      }),
-    );
+    const rows = assessments.map((assessment): AssessmentRow => ({
+      id: assessment.id,
+      number: assessment.number,
+      flow: assessment.flowName,
+      program: assessment.program.name,
+      outcome: assessment.outcome,
+      sentence: assessment.result.sentences.join(" "),
+      createdAt: assessment.createdAt.toISOString(),
+      createdBy: assessment.createdBy.name,
+      outOfDate: assessment.flow.updatedAt > assessment.createdAt,
+    }));
     return { rows, total, params };
   });
 }

@@ -24,8 +24,7 @@ const shownContributions = 6;
 
 function stepResult({ state, required, outcome, uncertainty, budget }: AssessedStep): StepResult {
   const { step, before, after } = state;
-  const shape = (lying: LyingShape | null, u: number | null, faceUp: FaceUp) =>
-    lying && shapeResult(lying, u, faceUp);
+  const shape = (lying: LyingShape | null, u: number | null, faceUp: FaceUp) => lying && shapeResult(lying, u, faceUp);
   return {
     number: state.number,
     kind: step.kind,

@@ -73,16 +73,14 @@ function stepDetail(step: FlowStep, films: FlowStepFilm[]): StepDetail {
     bondingMaterial: step.bondingMaterial ? bondingMaterialInput(step.bondingMaterial) : null,
     bondThickness: step.bondThickness ?? null,
     groundFaceForce: step.groundFaceForce ?? null,
-    films: films.map(
-      (film): StepFilmDetail => ({
-        change: film.change,
-        side: film.side,
-        film: filmInput(film.film),
-        thickness: film.thickness ?? null,
-        ownStress: film.stress ?? null,
-        stress: film.stress ?? film.film.stress,
-        coverage: film.coverage,
-      }),
-    ),
+    films: films.map((film): StepFilmDetail => ({
+      change: film.change,
+      side: film.side,
+      film: filmInput(film.film),
+      thickness: film.thickness ?? null,
+      ownStress: film.stress ?? null,
+      stress: film.stress ?? film.film.stress,
+      coverage: film.coverage,
+    })),
   };
 }

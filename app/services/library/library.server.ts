@@ -1,4 +1,4 @@
-import { raw, ReferenceKind } from "@mikro-orm/postgresql";
+import { raw, ReferenceKind, wrap } from "@mikro-orm/postgresql";
 import type { EntityName } from "@mikro-orm/core";
 import { PAGE_SIZE, type ListPage, type ListParams } from "#app/lib/list-params.ts";
 import { mayOnSite } from "#app/policies/permissions.ts";
@@ -26,7 +26,7 @@ const ABOUT_THE_RECORD = new Set(["createdAt", "createdBy", "updatedAt", "update
 
 /** The plain columns of an entity, without those about the record. */
 function plain<Key extends LibraryKey>(key: Key, entity: NamedRecord): LibraryRecord<Key> {
-  const columns = LIBRARY[key].entity.meta.props.filter(
+  const columns = wrap(entity, true).__meta.props.filter(
     ({ kind, name }) => kind === ReferenceKind.SCALAR && !ABOUT_THE_RECORD.has(name),
   );
   const values = entity as unknown as Record<string, unknown>;

@@ -1,6 +1,6 @@
 import { describe, expect, it } from "vitest";
 import { Cut } from "#app/components/drawings/Cut.tsx";
-import { cutLayout, layerHeight } from "#app/components/drawings/cutLayout.ts";
+import { cutLayout, layerHeight } from "#app/components/drawings/cut-layout.ts";
 import { CutMaterial, type MaterialKind } from "#app/components/drawings/CutMaterial.tsx";
 import { attributes, render, words } from "./render.ts";
 import { LAYERS } from "./samples.ts";

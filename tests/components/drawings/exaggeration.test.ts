@@ -1,6 +1,6 @@
 import { describe, expect, it } from "vitest";
-import { chooseExaggeration, EXAGGERATIONS } from "#app/components/drawings/chooseExaggeration.ts";
-import { setAsideExaggeration } from "#app/components/drawings/setAsideExaggeration.ts";
+import { chooseExaggeration, EXAGGERATIONS } from "#app/components/drawings/choose-exaggeration.ts";
+import { setAsideExaggeration } from "#app/components/drawings/set-aside-exaggeration.ts";
 
 const D = 0.3;
 

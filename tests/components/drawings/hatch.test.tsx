@@ -1,6 +1,6 @@
 import { describe, expect, it } from "vitest";
 import { Hatch } from "#app/components/drawings/Hatch.tsx";
-import { hatchPath } from "#app/components/drawings/hatchPath.ts";
+import { hatchPath } from "#app/components/drawings/hatch-path.ts";
 import { HatchBox } from "#app/components/drawings/HatchBox.tsx";
 import { HATCH_STYLES, OUTCOME_SIGNS, SUPPORT_SIGNS } from "#app/components/drawings/severity.ts";
 import { attributes, render } from "./render.ts";

@@ -1,13 +1,13 @@
 import { describe, expect, it } from "vitest";
 import { ProfileChart } from "#app/components/charts/ProfileChart.tsx";
 import { WarpChart } from "#app/components/charts/WarpChart.tsx";
-import { limitLabels } from "#app/components/drawings/limitLabels.ts";
-import { plotScale } from "#app/components/drawings/plotScale.ts";
+import { limitLabels } from "#app/components/drawings/limit-labels.ts";
+import { plotScale } from "#app/components/drawings/plot-scale.ts";
 import { PrintPlot } from "#app/components/drawings/PrintPlot.tsx";
-import { profilePlot } from "#app/components/drawings/profilePlot.ts";
-import { seriesValue } from "#app/components/drawings/seriesValue.ts";
-import { spreadLabels } from "#app/components/drawings/spreadLabels.ts";
-import { warpPlot } from "#app/components/drawings/warpPlot.ts";
+import { profilePlot } from "#app/components/drawings/profile-plot.ts";
+import { seriesValue } from "#app/components/drawings/series-value.ts";
+import { spreadLabels } from "#app/components/drawings/spread-labels.ts";
+import { warpPlot } from "#app/components/drawings/warp-plot.ts";
 import { attributes, render, words } from "./render.ts";
 import { WARP } from "./samples.ts";
 

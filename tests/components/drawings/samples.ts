@@ -1,6 +1,6 @@
-import type { CutLayer } from "#app/components/drawings/cutLayer.ts";
-import type { StripStep } from "#app/components/drawings/stripStep.ts";
-import type { WarpPlotInput } from "#app/components/drawings/warpPlot.ts";
+import type { CutLayer } from "#app/components/drawings/cut-layer.ts";
+import type { StripStep } from "#app/components/drawings/strip-step.ts";
+import type { WarpPlotInput } from "#app/components/drawings/warp-plot.ts";
 
 /** Drawn samples after the invented Petrel and Tern programs; their numbers stand for nothing but their shape. */
 export const LAYERS: readonly CutLayer[] = [

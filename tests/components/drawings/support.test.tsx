@@ -1,6 +1,6 @@
 import { describe, expect, it } from "vitest";
-import { plannedSpans } from "#app/components/drawings/plannedSpans.ts";
-import { runsOf } from "#app/components/drawings/runsOf.ts";
+import { plannedSpans } from "#app/components/drawings/planned-spans.ts";
+import { runsOf } from "#app/components/drawings/runs-of.ts";
 import { StepStrip } from "#app/components/drawings/StepStrip.tsx";
 import { SupportBar } from "#app/components/drawings/SupportBar.tsx";
 import type { SupportClass } from "#app/engine/vocabulary.ts";

@@ -1,12 +1,12 @@
 import { describe, expect, it } from "vitest";
 import { AnswerLine } from "#app/components/drawings/AnswerLine.tsx";
 import { FindingTag } from "#app/components/drawings/FindingTag.tsx";
-import { noBreak } from "#app/components/drawings/noBreak.ts";
+import { noBreak } from "#app/components/drawings/no-break.ts";
 import { SourceMark } from "#app/components/drawings/SourceMark.tsx";
 import { SupportTag } from "#app/components/drawings/SupportTag.tsx";
-import { textWidth } from "#app/components/drawings/textWidth.ts";
+import { textWidth } from "#app/components/drawings/text-width.ts";
 import { TitleBlock } from "#app/components/drawings/TitleBlock.tsx";
-import { wrapText } from "#app/components/drawings/wrapText.ts";
+import { wrapText } from "#app/components/drawings/wrap-text.ts";
 import { OUTCOMES, SOURCE_KINDS, SUPPORT_CLASSES } from "#app/engine/vocabulary.ts";
 import { render, words } from "./render.ts";
 

@@ -84,8 +84,7 @@ describe("laminates", () => {
 
   it("mean film stress from curvature: (M_s h³ + M_f h_f³) κ / (6 h_f (h + h_f))", () => {
     const solved = solveLaminate(cases[0]?.layers ?? []);
-    const mean =
-      ((180e9 * 100e-6 ** 3 + 169230769230.76923 * 10e-6 ** 3) * solved.curvature) / (6 * 10e-6 * 110e-6);
+    const mean = ((180e9 * 100e-6 ** 3 + 169230769230.76923 * 10e-6 ** 3) * solved.curvature) / (6 * 10e-6 * 110e-6);
     expect(relative(mean, 212278697.5)).toBeLessThan(1e-9);
     expect(relative(solved.meanStress[1], mean)).toBeLessThan(1e-12);
   });

@@ -1,4 +1,4 @@
-import { textWidth } from "./textWidth.ts";
+import { textWidth } from "./text-width.ts";
 
 /**
  * Breaks a text after spaces and hyphens into lines of at most `width` px (SVG does not wrap). A longer word keeps its

@@ -1,5 +1,5 @@
 import type { PlotTick } from "./plot.ts";
-import { textWidth } from "./textWidth.ts";
+import { textWidth } from "./text-width.ts";
 
 /** The ticks of a level axis whose text has room: from the left, each that clears the one before by 5 px. */
 export function roomyTicks(ticks: readonly PlotTick[], scale: (value: number) => number, textSize: number): PlotTick[] {

@@ -1,5 +1,5 @@
-import { spreadLabels } from "./spreadLabels.ts";
-import { wrapText } from "./wrapText.ts";
+import { spreadLabels } from "./spread-labels.ts";
+import { wrapText } from "./wrap-text.ts";
 
 /** Columns of the cut, px. */
 export const CUT = { width: 464, left: 96, right: 276, dimension: 78, label: 306, labelEnd: 458 } as const;

@@ -1,7 +1,7 @@
 import { describe, expect, it } from "vitest";
 import { BowLine, type BowLineProps } from "#app/components/drawings/BowLine.tsx";
-import { bandPath, linePath, offsetCurve, type BowCurve } from "#app/components/drawings/bowCurve.ts";
-import { drawBow, type BowShape } from "#app/components/drawings/bowShape.ts";
+import { bandPath, linePath, offsetCurve, type BowCurve } from "#app/components/drawings/bow-curve.ts";
+import { drawBow, type BowShape } from "#app/components/drawings/bow-shape.ts";
 import { HOLDINGS } from "#app/engine/vocabulary.ts";
 import { attributes, render } from "./render.ts";
 

@@ -1,4 +1,4 @@
-import { chooseExaggeration } from "./chooseExaggeration.ts";
+import { chooseExaggeration } from "./choose-exaggeration.ts";
 
 /** A bow more than this many times the median may be taken out of the choice. */
 const FAR_ABOVE = 4;

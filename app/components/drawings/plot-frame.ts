@@ -1,5 +1,5 @@
 import type { Plot, PlotFrame } from "./plot.ts";
-import { textWidth } from "./textWidth.ts";
+import { textWidth } from "./text-width.ts";
 
 /**
  * Margins of a plot: left for the ticks' text, below for ticks and title, right for the labels at the line ends (60 to

@@ -1,5 +1,5 @@
 import type { Plot, PlotLimit, PlotSeries, PlotTick } from "./plot.ts";
-import { seriesValue } from "./seriesValue.ts";
+import { seriesValue } from "./series-value.ts";
 
 export interface WarpPlotInput {
   /** x: silicon thickness, m; y: warp of the free wafer, m. The first is the stack as drawn. */

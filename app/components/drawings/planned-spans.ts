@@ -1,6 +1,6 @@
-import { runsOf } from "./runsOf.ts";
-import { stackRows } from "./stackRows.ts";
-import { textWidth } from "./textWidth.ts";
+import { runsOf } from "./runs-of.ts";
+import { stackRows } from "./stack-rows.ts";
+import { textWidth } from "./text-width.ts";
 
 /** A planned support over a run of steps. */
 export interface PlannedSpan {

@@ -1,5 +1,5 @@
 import type { Holding, Outcome, SupportClass } from "#app/engine/vocabulary.ts";
-import type { BowShape } from "./bowShape.ts";
+import type { BowShape } from "./bow-shape.ts";
 
 /** One step as the strip draws it. Numbers are SI; what is printed comes as text. */
 export interface StripStep {

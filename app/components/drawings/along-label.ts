@@ -1,4 +1,4 @@
-import { seriesValue } from "./seriesValue.ts";
+import { seriesValue } from "./series-value.ts";
 import type { Plot, PlotFrame, PlotScales, PlotSeries } from "./plot.ts";
 
 /**

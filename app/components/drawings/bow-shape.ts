@@ -1,4 +1,4 @@
-import type { BowCurve } from "./bowCurve.ts";
+import type { BowCurve } from "./bow-curve.ts";
 
 /**
  * A wafer's shape as it lies on the tool, not device side up. `bow` is positive when the centre is high as drawn, m;

@@ -1,0 +1,20 @@
+import { getTextareaProps, type FieldMetadata } from "@conform-to/react";
+
+/** Several lines of text. */
+export function NoteField({
+  field,
+  label,
+  rows = 3,
+}: {
+  field: FieldMetadata<string | undefined>;
+  label: string;
+  rows?: number;
+}) {
+  return (
+    <div className="field">
+      <label htmlFor={field.id}>{label}</label>
+      <textarea {...getTextareaProps(field)} key={field.key} rows={rows} aria-describedby={field.errorId} />
+      <small id={field.errorId}>{field.errors?.[0]}</small>
+    </div>
+  );
+}

@@ -1,0 +1,55 @@
+import { SourceMark } from "#app/components/drawings/SourceMark.tsx";
+import type { Measured } from "#app/engine/measured.ts";
+import type { Dimension } from "#app/engine/units/dimensions.ts";
+import { formatMeasured } from "#app/lib/format-measured.ts";
+
+export interface Property {
+  label: string;
+  measured: Measured | null | undefined;
+  dimension: Dimension;
+  unit: string;
+  sign?: boolean;
+  /** what it means that none is given */
+  missing?: string;
+}
+
+/** Properties of a material with tolerance, source and note: where every number comes from. */
+export function PropertyTable({ caption, properties }: { caption: string; properties: Property[] }) {
+  return (
+    <div className="overflow-x-auto" tabIndex={0} role="region" aria-label={caption}>
+      <table className="table">
+        <caption className="sr-only">{caption}</caption>
+        <thead>
+          <tr>
+            <th scope="col">Property</th>
+            <th scope="col" className="num">
+              Value ± tolerance
+            </th>
+            <th scope="col">Source</th>
+            <th scope="col">Where exactly</th>
+          </tr>
+        </thead>
+        <tbody>
+          {properties.map(({ label, measured, dimension, unit, sign, missing }) => (
+            <tr key={label}>
+              <th scope="row" className="font-normal">
+                {label}
+              </th>
+              <td className="num font-medium">
+                {measured ? formatMeasured(measured, dimension, { unit, sign }) : "–"}
+              </td>
+              <td>
+                {measured ? (
+                  <SourceMark kind={measured.source} />
+                ) : (
+                  <span className="text-quiet">{missing ?? "not given"}</span>
+                )}
+              </td>
+              <td className="text-quiet">{[measured?.note, measured?.on].filter(Boolean).join(", ")}</td>
+            </tr>
+          ))}
+        </tbody>
+      </table>
+    </div>
+  );
+}

@@ -1,0 +1,7 @@
+export function loader() {
+  return null;
+}
+
+export default function Page() {
+  return null;
+}

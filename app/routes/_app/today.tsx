@@ -1,0 +1,3 @@
+export default function Today() {
+  return <h1 className="text-answer">Today</h1>;
+}
