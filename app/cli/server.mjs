@@ -66,7 +66,8 @@ export async function serveBuild(keeper, { port, env, logFile }) {
   const server = keeper.start(process.execPath, [packageProgram("react-router-serve"), builtServer], {
     cwd: root,
     env: { ...env, NODE_ENV: "production", HOST: loopback, PORT: String(port) },
-    stdio: ["ignore", log, log],
+    // The server's own access lines hold whole addresses, with what people searched for: only Planeward's log is kept.
+    stdio: ["ignore", "ignore", log],
     stop,
   });
   closeSync(log);

@@ -30,7 +30,7 @@ export const METROLOGY = {
   },
   "first-order-uncertainty": {
     title: "Standard uncertainty, first order",
-    formula: "u^2 = Σ (df/dx_i)^2 u(x_i)^2",
+    formula: "u^2 = Σ u_i^2, u_i = (df/dx_i) u(x_i)",
     symbols: [
       { symbol: "u", meaning: "standard uncertainty of the figure, in its own unit", unit: "1" },
       { symbol: "u_i", meaning: "share of input i: its uncertainty times the slope of the figure", unit: "1" },

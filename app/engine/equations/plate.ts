@@ -21,7 +21,7 @@ export const PLATE = {
       poisson,
     ],
     range:
-      "Uniform film, gravity left out, up to S_cr: within 0.5 % of a full von Karman solution. Unequal curvatures are solved as a pair. Silicon (100): 2.5 %.",
+      "Uniform film, gravity left out, up to S_cr: within 0.5 % of a full von Karman solution. Unequal curvatures are solved as the pair of equations of a rolled wafer. Silicon (100): 2.5 %.",
     sources: ["freund-2000", "masters-salamon-1993", "plate-perturbation", "plate-von-karman"],
     caution: "The centre flattens and the rim bends more: centre, parabola and bow give different curvatures.",
   },
@@ -42,7 +42,7 @@ export const PLATE = {
       thickness,
     ],
     range:
-      "Past S_cr. Within 2 % of a full von Karman solution for equal curvatures and ν from 0.16 to 0.45; 7 % for opposite ones; slopes of any size by the arc.",
+      "Past S_cr. Within 2 % of a full von Karman solution for equal curvatures and ν from 0.16 to 0.45, 3 % for unequal ones, 7 % for opposite ones; slopes of any size by the arc.",
     sources: ["freund-2000", "finot-1997", "plate-von-karman"],
     caution: "A real wafer rolls early and gradually, about the axis that an uneven film, the notch or a wedge picks.",
   },

@@ -59,10 +59,13 @@ const LINEAR_WITHIN = 0.01;
  * theory.
  *
  * `linear` while the small-deflection bow is within 1 % along both axes (of the larger one), `nonlinear` up to the onset of
- * rolling, `curled` beyond it. Against a full von Karman solution the major bow is within 0.5 % before the onset; past it within
- * 2 % for ν from 0.16 to 0.45, 3.5 % down to ν = 0. The minor bow of a curled wafer is within 0.35 thicknesses, its
- * three-point bow up to 5 % low and its warp up to 1.5 % low. Unequal curvatures of one sign: 3 % of the major bow; of
- * opposite signs: 6 %. With `crystal` '100' the bow along <100> is within 2.5 %.
+ * rolling, `curled` beyond it. Against a full von Karman solution the bow along the axis that bends most is
+ * - before the onset within 0.5 %,
+ * - past it within 2 % for ν from 0.16 to 0.45, 3.5 % down to ν = 0,
+ * - for unequal curvatures of one sign within 3 %, of opposite signs 7 %, 20 % where a saddle has just snapped into a roll,
+ * - with `crystal` '100' within 2.5 %, along <100>.
+ * The curvatures are within 5 %, but for opposite signs the centre's is not to be relied on. Across a roll the bow is within
+ * 0.35 thicknesses; the three-point bow of a roll is up to 5 % and its warp up to 1.5 % low.
  *
  * Bows are those of an arc of the wafer's own length. A roll that closes, more than half a turn from centre to rim, keeps the
  * height of half a turn, twice the roll radius, as bow and warp.

@@ -108,25 +108,34 @@ function scanFrame(points: readonly ProfilePoint[]): { centre: number; halfWidth
   return { centre: (first + last) / 2, halfWidth: (last - first) / 2 };
 }
 
-/** Leaves out the points that lie off the parabola of all the others still in, until none does. */
+/**
+ * Leaves out the points that lie off the parabola of those still in, until the choice stays. Every round judges all points
+ * again, because a gross outlier at the edge bends the first fit away from its neighbours too.
+ */
 function withoutOutliers(inside: IndexedPoint[]): IndexedPoint[] {
+  // A perfect parabola leaves rounding only, which is no scatter to judge points by.
+  const rounding = 1e-12 * inside.reduce((largest, { z }) => Math.max(largest, Math.abs(z)), 0);
   let kept = inside;
   for (let round = 0; round < 20; round += 1) {
-    const { centre, halfWidth } = scanFrame(kept);
-    const { residuals } = fitPolynomial(
-      kept.map(({ x, z }) => ({ t: (x - centre) / halfWidth, z })),
-      2,
-    );
-    const size = median(residuals.map(Math.abs));
-    // A perfect parabola leaves rounding only, which is no scatter to judge points by.
-    const rounding = 1e-12 * kept.reduce((largest, { z }) => Math.max(largest, Math.abs(z)), 0);
-    const limit = Math.max(REJECT_BEYOND * NORMAL_OVER_MEDIAN * size, rounding);
-    const next = kept.filter((_, n) => Math.abs(residuals[n] ?? 0) <= limit);
-    if (next.length === kept.length) return kept;
+    const off = distancesFromParabola(inside, kept);
+    const limit = Math.max(REJECT_BEYOND * NORMAL_OVER_MEDIAN * median(off), rounding);
+    const next = inside.filter((_, n) => (off[n] ?? 0) <= limit);
     requireEnough("points", new Set(next.map(({ x }) => x)).size);
+    if (next.length === kept.length && next.every((point, n) => point === kept[n])) return kept;
     kept = next;
   }
   return kept;
+}
+
+function distancesFromParabola(all: readonly ProfilePoint[], kept: readonly ProfilePoint[]): number[] {
+  const { centre, halfWidth } = scanFrame(kept);
+  const place = (x: number) => (x - centre) / halfWidth;
+  const fit = fitPolynomial(
+    kept.map(({ x, z }) => ({ t: place(x), z })),
+    2,
+  );
+  const [c0 = 0, c1 = 0, c2 = 0] = fit.coefficients;
+  return all.map(({ x, z }) => Math.abs(z - (c0 + (c1 + c2 * place(x)) * place(x))));
 }
 
 function leftOut(all: readonly IndexedPoint[], kept: readonly IndexedPoint[]): number[] {
