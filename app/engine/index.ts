@@ -3,7 +3,7 @@
  * SI out; z points out of the device side, curvature is positive for a bowl, stress in tension. Bows carry the sign of the
  * curvature inside; `standardBow` turns one into the standard bow. Bad input throws `EngineInputError`, nothing returns NaN.
  */
-export const ENGINE_VERSION = "0.1.0";
+export { ENGINE_VERSION } from "./version.ts";
 
 export { EngineInputError } from "./errors.ts";
 export * from "./vocabulary.ts";
@@ -72,7 +72,19 @@ export { filmStressFromProfilesWorking } from "./profile/working.ts";
 export { combineUncertainty, type CombinedUncertainty, type UncertainInput } from "./uncertainty/combine.ts";
 
 // Stack estimate
+export type { StackFilm, StackInput } from "./stack/model.ts";
+export { estimateStack, type StackEstimate } from "./stack/estimate-stack.ts";
+export { stackSupport, type StackSupport } from "./stack/stack-support.ts";
+export { curlingThickness, thicknessSweep, type SweepPoint } from "./stack/thickness-sweep.ts";
 
 // Process flow
+export type { Measured } from "./measured.ts";
+export type { FlowInput, StepInput } from "./flow/model.ts";
+export { walkFlow, type StepState, type WalkOptions } from "./flow/walk.ts";
+export { assessFlow, type AssessedStep, type FlowAssessment, type Verdict } from "./flow/assess.ts";
+export { answerSentences, supportSpans } from "./flow/answer.ts";
 
 // Handling rules
+export type { Figure, Finding, FindingLimit, Rule, RuleContext } from "./rules/finding.ts";
+export { defaultLimits, LIMIT_DEFINITIONS, type LimitKey, type SiteLimits } from "./rules/limits.ts";
+export { RULES } from "./rules/rules.ts";

@@ -1,4 +1,10 @@
-import { ChangeSetType, type EntityManager, type EventSubscriber, type FlushEventArgs } from "@mikro-orm/core";
+import {
+  ChangeSetType,
+  type EntityManager,
+  type EntityMetadata,
+  type EventSubscriber,
+  type FlushEventArgs,
+} from "@mikro-orm/core";
 import { randomUUID } from "node:crypto";
 import { AuditEvent } from "#app/db/entities/audit-event.ts";
 
@@ -81,22 +87,35 @@ export class AuditSubscriber implements EventSubscriber {
           em.create(AuditEvent, { id: randomUUID(), field: null, from: null, to: null, ...base, ...event } as never),
         );
       if (change.type === ChangeSetType.DELETE || change.type === ChangeSetType.DELETE_EARLY) {
-        write({ action: "removed", from: summary(change.originalEntity as Plain | undefined) });
+        write({ action: "removed", from: summary(change.meta, change.originalEntity as Plain | undefined) });
         continue;
       }
       if (change.type === ChangeSetType.CREATE) {
-        write({ action: "created", to: summary(change.payload as Plain) });
+        write({ action: "created", to: summary(change.meta, change.payload as Plain) });
         continue;
       }
       const before = (change.originalEntity ?? {}) as Plain;
       for (const [field, to] of Object.entries(change.payload as Plain))
-        if (!LEFT_OUT.has(field)) write({ action: "changed", field, from: before[field] ?? null, to: to ?? null });
+        if (!LEFT_OUT.has(field))
+          write({
+            action: "changed",
+            field,
+            from: readable(change.meta, field, before[field]),
+            to: readable(change.meta, field, to),
+          });
         else if (field === "passwordHash") write({ action: "changed", field });
     }
   }
 }
 
-function summary(record: Plain | undefined): Plain | null {
+function summary(meta: EntityMetadata, record: Plain | undefined): Plain | null {
   if (!record) return null;
-  return Object.fromEntries(Object.entries(record).filter(([field]) => !LEFT_OUT.has(field)));
+  const shown = Object.entries(record).filter(([field]) => !LEFT_OUT.has(field));
+  return Object.fromEntries(shown.map(([field, value]) => [field, readable(meta, field, value)]));
+}
+
+/** A value as it stands in a change set: what goes into a JSON column is text there already. */
+function readable(meta: EntityMetadata, field: string, value: unknown): unknown {
+  const json = (meta.properties as Record<string, { type: string }>)[field]?.type === "JsonType";
+  return json && typeof value === "string" ? JSON.parse(value) : (value ?? null);
 }

@@ -5,7 +5,16 @@ import type { ActorScope } from "#app/server/scope.server.ts";
 
 const database = useDatabase({ demo: true });
 
-const PROGRAM_TABLES = ["stack", "stack_layer", "flow", "flow_step", "flow_step_film", "assessment", "scan_file", "scan"];
+const PROGRAM_TABLES = [
+  "stack",
+  "stack_layer",
+  "flow",
+  "flow_step",
+  "flow_step_film",
+  "assessment",
+  "scan_file",
+  "scan",
+];
 const SITE_TABLES = ["film", "silicon", "carrier", "bonding_material", "equipment", "site_limit"];
 
 let engineer: ActorScope;
@@ -44,12 +53,18 @@ describe("every table", () => {
     expect(named.map(({ table_name }) => table_name).sort()).toEqual([...PROGRAM_TABLES].sort());
   });
 
-  test.each([...PROGRAM_TABLES, ...SITE_TABLES, "person", "credential", "session", "membership", "program", "audit_event"])(
-    "%s shows nothing to nobody",
-    async (table) => {
-      expect(await forgetful(null, `select * from "${table}"`)).toEqual([]);
-    },
-  );
+  test.each([
+    ...PROGRAM_TABLES,
+    ...SITE_TABLES,
+    "person",
+    "credential",
+    "session",
+    "membership",
+    "program",
+    "audit_event",
+  ])("%s shows nothing to nobody", async (table) => {
+    expect(await forgetful(null, `select * from "${table}"`)).toEqual([]);
+  });
 });
 
 describe("a query that forgets its program", () => {
