@@ -32,10 +32,8 @@ export default tseslint.config(
   ...tseslint.configs.recommended,
   {
     files: ["**/*.{ts,tsx}"],
-    plugins: { "react-hooks": hooks },
     linterOptions: { reportUnusedDisableDirectives: "error" },
     rules: {
-      ...hooks.configs.recommended.rules,
       "@typescript-eslint/no-explicit-any": "error",
       "@typescript-eslint/consistent-type-imports": "error",
       "@typescript-eslint/no-unused-vars": ["error", { argsIgnorePattern: "^_", varsIgnorePattern: "^_" }],
@@ -44,6 +42,11 @@ export default tseslint.config(
       "no-console": "error",
       "max-lines": ["error", { max: 400, skipBlankLines: true, skipComments: true }],
     },
+  },
+  {
+    files: ["app/**/*.{ts,tsx}"],
+    plugins: { "react-hooks": hooks },
+    rules: hooks.configs.recommended.rules,
   },
   {
     // The engine is pure: the same code runs in the browser, on the server, in jobs and in tests.
