@@ -119,10 +119,19 @@ export function measured(rule: MeasuredRule) {
   });
 }
 
-/** A property that may be left blank. */
+/** A property that may be left blank, but not its value alone: what was typed beside it would be lost. */
 export function optionalMeasured(rule: MeasuredRule) {
   return measuredShape
-    .transform((fields, context): Measured | null => toMeasured(fields, rule, context))
+    .transform((fields, context): Measured | null => {
+      const result = toMeasured(fields, rule, context);
+      if (!fields.value?.trim() && (fields.tolerance?.trim() || fields.note))
+        context.addIssue({
+          code: "custom",
+          path: ["value"],
+          message: `Type the ${rule.label} as well, or clear its tolerance and note.`,
+        });
+      return result;
+    })
     .optional()
     .transform((value) => value ?? null);
 }

@@ -2,10 +2,19 @@ import type { Submission } from "@conform-to/react";
 import { parseWithZod } from "@conform-to/zod/v4";
 import type { z } from "zod";
 import type { Saved } from "#app/services/record.server.ts";
+import { problem } from "./problem.server.ts";
 
-/** A posted form as its schema understands it. */
+/**
+ * A posted form as its schema understands it. NUL, which the database does not know, is taken out of texts.
+ * @throws 400 for a request that is no form
+ */
 export async function readForm<Schema extends z.ZodType>(request: Request, schema: Schema) {
-  const formData = await request.formData();
+  const formData = new FormData();
+  const posted = await request.formData().catch(() => {
+    throw problem(400, "What was sent is not a form. Open the page again and send its form.");
+  });
+  for (const [name, value] of posted)
+    formData.append(name, typeof value === "string" ? value.replaceAll("\0", "") : value);
   return { formData, submission: parseWithZod(formData, { schema }) };
 }
 
