@@ -1,10 +1,13 @@
-import { expect, test } from "vitest";
+import { beforeAll, expect, test } from "vitest";
 import { scopeOfPerson } from "#tests/db/people.ts";
 import { asOwner, useDatabase } from "#tests/db/test-database.ts";
 
 const database = useDatabase({ demo: true });
 
 const pages = () => import("#app/services/library/kind-pages.server.ts");
+
+// The first import reads the whole server: that is no test's time.
+beforeAll(async () => void (await pages()), 60_000);
 
 test("a list is filtered and sorted by what its address says, and an unknown word changes nothing", async () => {
   const { listKind } = await pages();

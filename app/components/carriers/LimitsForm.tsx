@@ -1,4 +1,5 @@
 import { getFormProps, type SubmissionResult } from "@conform-to/react";
+import { useEffect, useRef } from "react";
 import { Form, Link } from "react-router";
 import { FormHead } from "#app/components/forms/FormHead.tsx";
 import { LineField } from "#app/components/forms/LineField.tsx";
@@ -41,9 +42,12 @@ export function LimitsForm({ group, lastResult, opened }: Props) {
     lastResult,
     defaultValue: Object.fromEntries(limits.map((limit) => [limit.key, textOf(limit)])),
   });
+  // The link that led here is gone with the table that it stood above: the reader goes on from the heading.
+  const heading = useRef<HTMLHeadingElement>(null);
+  useEffect(() => heading.current?.focus(), []);
   return (
     <Form method="post" {...getFormProps(form)} className="p-4 tablet:p-6" aria-labelledby={`rule-${rule}`}>
-      <h2 id={`rule-${rule}`} className="text-lead font-semibold">
+      <h2 id={`rule-${rule}`} ref={heading} tabIndex={-1} className="text-lead font-semibold">
         {groupTitle(group)}
       </h2>
       <div className="mt-3">

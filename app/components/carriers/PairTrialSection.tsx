@@ -1,4 +1,5 @@
 import { Form, Link } from "react-router";
+import { FindingTag } from "#app/components/drawings/FindingTag.tsx";
 import { noBreak } from "#app/components/drawings/no-break.ts";
 import { SourceMark } from "#app/components/drawings/SourceMark.tsx";
 import { SelectField } from "#app/components/ui/SelectField.tsx";
@@ -19,7 +20,11 @@ export function PairTrialSection({ trial }: { trial: PairTrial }) {
         <>
           <p className="max-w-[44em] text-figure font-medium text-pretty">{noBreak(pairAnswer(pair))}</p>
           <p className="mt-1 max-w-[60em] text-quiet">{noBreak(whyPairBow(pair))}</p>
-          {pair.cannotRelease && <p className="mt-2 font-semibold text-caution">{pair.cannotRelease}</p>}
+          {pair.cannotRelease && (
+            <p className="mt-2">
+              <FindingTag outcome="caution">{pair.cannotRelease}</FindingTag>
+            </p>
+          )}
         </>
       )}
       {materials.length === 0 ? (
@@ -46,6 +51,9 @@ function TrialForm({ trial: { materials, chosen, fault, pair } }: { trial: PairT
         label="Bonding material"
         options={materials.map(({ id, name }) => ({ value: id, label: name }))}
         defaultValue={chosen.material}
+        hint={
+          pair && noBreak(`At ${formatQuantity(pair.bondThickness, "length", { unit: "µm" })}, the middle of its range`)
+        }
         className="w-80 max-w-full"
       />
       <TextField
