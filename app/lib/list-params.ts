@@ -25,13 +25,16 @@ export function readListParams(
   const known = sorts.includes(name);
   const page = Number.parseInt(search.get("page") ?? "", 10);
   return {
-    query: (search.get("q") ?? "").trim().slice(0, 100),
+    query: plain(search.get("q")).trim(),
     sort: known ? name : (sorts[0] ?? ""),
     descending: known ? asked.startsWith("-") : descending,
     page: Number.isInteger(page) && page > 0 ? Math.min(page, 100_000) : 1,
-    filters: Object.fromEntries(filters.map((key) => [key, (search.get(key) ?? "").slice(0, 100)])),
+    filters: Object.fromEntries(filters.map((key) => [key, plain(search.get(key))])),
   };
 }
+
+/** Text from the address without characters that no database text can hold, at most 100 long. */
+const plain = (text: string | null) => (text ?? "").replace(/\p{Cc}/gu, " ").slice(0, 100);
 
 /** One page of a list with the number of all that match. */
 export interface ListPage<Row> {

@@ -21,6 +21,8 @@ export interface ProfileFormat {
 const PER_METRE: Record<LengthUnit, number> = { m: 1, mm: 1e3, µm: 1e6, nm: 1e9 };
 const LEAST_POINTS = 7;
 const SHOWN_ROWS = 20;
+/** Ten times what an instrument writes along a wafer; more would keep everybody else waiting. */
+const MOST_LINES = 50_000;
 /** Lines from which the delimiter is told. */
 const SAMPLE_LINES = 400;
 const LONGEST_CELL = 40;
@@ -91,6 +93,7 @@ const isWords = (cell: string | undefined) =>
 export function readProfile(bytes: Uint8Array, fileName: string, format: ProfileFormat): ReadProfile {
   const name = excerpt(fileName, 80);
   const text = profileText(bytes, name);
+  refuseTooLong(text, name);
   const table = tableOf(text, format.decimalMark);
   const read = readRows(table, format);
   refuseUnusable(read, text, name, format.decimalMark);
@@ -114,6 +117,15 @@ export function readProfile(bytes: Uint8Array, fileName: string, format: Profile
       skippedInAll: skipped.length,
     },
   };
+}
+
+function refuseTooLong(text: string, name: string): void {
+  let lines = 0;
+  for (let at = text.indexOf("\n"); at >= 0; at = text.indexOf("\n", at + 1)) lines += 1;
+  if (lines <= MOST_LINES) return;
+  throw new ProfileFileError(
+    `${name} has ${lines} lines; up to ${MOST_LINES} are read. Export one point in ${Math.ceil(lines / MOST_LINES)}.`,
+  );
 }
 
 interface ReadRows {

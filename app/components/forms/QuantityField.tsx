@@ -17,8 +17,11 @@ interface Props {
 export function QuantityField({ field, label, dimension, example, hint, className = "" }: Props) {
   const initial = field.initialValue ?? "";
   const [typed, setTyped] = useState(initial);
-  const changed = typed !== initial;
-  const error = changed ? undefined : field.errors?.[0];
+  const [said] = field.errors ?? [];
+  const [judged, setJudged] = useState({ said, typed });
+  if (said !== judged.said) setJudged({ said, typed });
+  // What the server found wrong is about the text that it was sent.
+  const error = typed === judged.typed ? said : undefined;
   const reading = typed.trim() === "" ? null : parseQuantity(typed, dimension);
   const fault = error ?? (reading && !reading.ok ? reading.message : undefined);
   return (

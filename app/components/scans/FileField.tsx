@@ -8,10 +8,12 @@ interface Props {
   label: string;
   /** the form came back, so the browser has let go of the file */
   again: boolean;
+  /** tells whether a file is chosen now */
+  onChosen: (chosen: boolean) => void;
 }
 
 /** A file to choose. One that is too large is turned down as soon as it is chosen. */
-export function FileField({ field, label, again }: Props) {
+export function FileField({ field, label, again, onChosen }: Props) {
   const [chosen, setChosen] = useState<{ words: string; tooLarge: boolean } | null>(null);
   const fault = chosen === null ? field.errors?.[0] : chosen.tooLarge ? chosen.words : undefined;
   const hint = chosen?.words ?? (again ? "Choose the file again." : `CSV or text, up to ${LARGEST_FILE_WORDS}`);
@@ -29,8 +31,9 @@ export function FileField({ field, label, again }: Props) {
         onChange={(event) => {
           const input = event.currentTarget;
           const file = input.files?.[0];
+          const tooLarge = file !== undefined && file.size > LARGEST_FILE;
+          onChosen(file !== undefined && !tooLarge);
           if (!file) return setChosen(null);
-          const tooLarge = file.size > LARGEST_FILE;
           // Taken back at once, lest a long upload end in a refusal.
           if (tooLarge) input.value = "";
           setChosen({ words: tooLarge ? tooLargeSentence(file.name, file.size) : fileSize(file.size), tooLarge });

@@ -48,16 +48,14 @@ export function ScanForm({ programs, films, lastResult }: Props) {
     lastResult,
     defaultValue: { program: only?.value ?? "", orientation: "100", edgeExclusion: "5 mm" },
   });
-  const filesKey = useFilesKey(lastResult);
+  const { filesKey, chosen, note } = useChosenFiles(lastResult);
   const again = Boolean(lastResult?.error);
   return (
     <Form method="post" encType="multipart/form-data" {...getFormProps(form)} className="frame max-w-300">
       <div className="p-4 empty:hidden tablet:px-6">
         <FormHead lastResult={lastResult} />
-        {again && (
-          <p role="status" className="text-quiet">
-            Choose the two files again where the browser has let go of them.
-          </p>
+        {again && chosen < 2 && (
+          <p className="font-semibold">Choose the two files again: the browser has let go of them.</p>
         )}
       </div>
       <div className="grid wide:grid-cols-2">
@@ -108,8 +106,20 @@ export function ScanForm({ programs, films, lastResult }: Props) {
             Two columns each, position and height; height upwards with the film’s side up.
           </p>
           <div className="grid gap-x-3 gap-y-2 tablet:grid-cols-2">
-            <FileField key={`before ${filesKey}`} field={fields.before} label="File before the film" again={again} />
-            <FileField key={`after ${filesKey}`} field={fields.after} label="File after the film" again={again} />
+            <FileField
+              key={`before ${filesKey}`}
+              field={fields.before}
+              label="File before the film"
+              again={again}
+              onChosen={note("before")}
+            />
+            <FileField
+              key={`after ${filesKey}`}
+              field={fields.after}
+              label="File after the film"
+              again={again}
+              onChosen={note("after")}
+            />
             <ChoiceField field={fields.positionUnit} label="Unit of position" choices={UNITS} blank="Choose" />
             <ChoiceField field={fields.heightUnit} label="Unit of height" choices={UNITS} blank="Choose" />
             <ChoiceField
@@ -138,16 +148,23 @@ export function ScanForm({ programs, films, lastResult }: Props) {
   );
 }
 
+const NONE = { before: false, after: false };
+
 /**
- * Changes when the server found fault with a file: the inputs are then emptied, because a browser refuses to send a file again
- * that has been put right on the disk since it was chosen.
+ * How many of the two files are chosen, and a key for their inputs that changes when the server found fault with a file: the
+ * inputs are then emptied, because a browser refuses to send a file again that has been put right on the disk since.
  */
-function useFilesKey(lastResult: Props["lastResult"]): number {
+function useChosenFiles(lastResult: Props["lastResult"]) {
   const [seen, setSeen] = useState(lastResult);
-  const [key, setKey] = useState(0);
+  const [filesKey, setFilesKey] = useState(0);
+  const [files, setFiles] = useState(NONE);
   if (lastResult !== seen) {
     setSeen(lastResult);
-    if (["before", "after", ""].some((field) => lastResult?.error?.[field])) setKey(key + 1);
+    if (["before", "after", ""].some((field) => lastResult?.error?.[field])) {
+      setFilesKey(filesKey + 1);
+      setFiles(NONE);
+    }
   }
-  return key;
+  const note = (which: keyof typeof NONE) => (isChosen: boolean) => setFiles({ ...files, [which]: isChosen });
+  return { filesKey, chosen: Object.values(files).filter(Boolean).length, note };
 }

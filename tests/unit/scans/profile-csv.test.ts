@@ -138,6 +138,11 @@ describe("files that are no profile", () => {
       `x,z\n${rows(8)}\n${rows(9, () => "1.5,--")}`,
       /9 of 17 rows are no pair of numbers\. Row 10, height: “--” is not a number with a decimal point/,
     ],
+    [
+      "more lines than anything needs",
+      rows(100_003),
+      /has 100002 lines; up to 50000 are read\. Export one point in 3\./,
+    ],
     ["empty cells", rows(20, (n) => (n < 8 ? `${n},1` : `${n},`)), /Row 9, height: the cell is empty/],
   ])("%s", (_, content, says) => expect(refusal(content)).toMatch(says));
 });

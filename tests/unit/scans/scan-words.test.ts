@@ -107,7 +107,12 @@ describe("remarks", () => {
 
   it.each<[what: string, result: Partial<ScanResult>, parameters: Partial<ScanParameters>, says: RegExp]>([
     ["quartic beyond 5 %", { quartic: -0.0501 }, {}, /^caution: .*not spherical: 5 % of it is of fourth order/],
-    ["silicon below 300 µm", {}, { siliconThickness: 299e-6, filmThickness: 1e-7 }, /^caution: Silicon below 300 µm: a stylus/],
+    [
+      "silicon below 300 µm",
+      {},
+      { siliconThickness: 299e-6, filmThickness: 1e-7 },
+      /^caution: Silicon below 300 µm: a stylus/,
+    ],
     ["an understated stress", { understatedBy: 0.027 }, {}, /^caution: .*understated by about 2\.7 %/],
     ["a thick film", {}, { filmThickness: 13e-6 }, /^caution: The film is thick .* about 5\.4 % off/],
     ["a stress within its uncertainty", { stress: 1.4e6 }, {}, /^caution: .*cannot tell it from zero/],

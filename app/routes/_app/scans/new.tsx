@@ -1,10 +1,10 @@
-import { parseWithZod } from "@conform-to/zod/v4";
 import { data, redirect } from "react-router";
 import { PageHead } from "#app/components/layout/PageHead.tsx";
 import { ScanForm } from "#app/components/scans/ScanForm.tsx";
 import { LARGEST_FILE, LARGEST_FILE_WORDS, tooLargeSentence } from "#app/lib/scan-file.ts";
 import { scanSchema } from "#app/schemas/scan.ts";
 import { scopeOf } from "#app/server/contexts.server.ts";
+import { parseForm } from "#app/server/form.server.ts";
 import { readUpload, type Upload } from "#app/server/upload.server.ts";
 import { allOfLibrary } from "#app/services/library/library.server.ts";
 import { uploadScan } from "#app/services/scan-upload.server.ts";
@@ -30,7 +30,7 @@ export async function action({ request, context }: Route.ActionArgs) {
   const scope = scopeOf(context);
   scanPrograms(scope, "upload scans");
   const upload = await readUpload(request, FILES, { bytes: LARGEST_FILE, words: LARGEST_FILE_WORDS });
-  const submission = parseWithZod(upload.formData, { schema: scanSchema });
+  const submission = parseForm(upload.formData, scanSchema);
   const { before, after } = upload.files;
   if (submission.status !== "success" || !before || !after) {
     const status = Object.keys(upload.tooLarge).length > 0 ? 413 : 400;
