@@ -8,6 +8,7 @@ export interface ScanRow {
   label: string;
   program: string;
   film: string | null;
+  diameter: number;
   stress: number;
   stressUncertainty: number;
   /** standard bow, m; null when the wafer has rolled */

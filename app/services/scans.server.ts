@@ -1,3 +1,4 @@
+import type { EntityManager } from "@mikro-orm/postgresql";
 import { Scan } from "#app/db/entities/scan.ts";
 import { ScanFile } from "#app/db/entities/scan-file.ts";
 import { stoneyStressWorking } from "#app/engine/stoney/working.ts";
@@ -72,6 +73,7 @@ function rowOf(scan: Scan & { program: { name: string }; createdBy: { name: stri
     label: scan.label,
     program: scan.program.name,
     film: scan.film?.name ?? null,
+    diameter: scan.parameters.diameter,
     stress: scan.stress,
     stressUncertainty: scan.stressUncertainty,
     bowChange: scan.curled ? null : scan.bowChange,
@@ -79,6 +81,16 @@ function rowOf(scan: Scan & { program: { name: string }; createdBy: { name: stri
     createdAt: scan.createdAt.toISOString(),
     createdBy: scan.createdBy.name,
   };
+}
+
+/** The newest scans of some programs, within a transaction that is already open. */
+export async function latestScans(em: EntityManager, programs: string[], limit: number): Promise<ScanRow[]> {
+  const scans = await em.find(
+    Scan,
+    { program: { $in: programs } },
+    { populate: ["program", "film", "createdBy"], orderBy: [{ createdAt: "desc" }, { id: "asc" }], limit },
+  );
+  return scans.map(rowOf);
 }
 
 /** One scan, as it was stored. */
