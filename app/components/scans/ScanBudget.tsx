@@ -19,7 +19,7 @@ export function ScanBudget({ result }: { result: ScanResult }) {
       <h2 id="budget" className="font-semibold">
         Where the ± in {stressText(result)} comes from
       </h2>
-      <div className="overflow-x-auto" tabIndex={0} role="region" aria-labelledby="budget">
+      <div className="overflow-x-auto" tabIndex={0} role="region" aria-label="Parts of the uncertainty">
         <table className="table">
           <thead>
             <tr>
