@@ -30,9 +30,14 @@ interface LibraryFilm {
   source: SourceKind;
 }
 
-/** The answer of a scan: what was measured, and how it stands to what the library uses. */
+/**
+ * The answer of a scan: what was measured, and how it stands to what the library uses. A wafer that has rolled gives no stress,
+ * because the relation behind it does not hold there.
+ */
 export function scanAnswer(label: string, film: LibraryFilm | null, result: ScanResult): string[] {
-  const measured = `${film?.name ?? label}: ${stressText(result)}, ${senseOf(result)}.`;
+  const name = film?.name ?? label;
+  if (result.curled) return [`${name}: the wafer has rolled up, so these scans give no film stress.`];
+  const measured = `${name}: ${stressText(result)}, ${senseOf(result)}.`;
   if (!film) return [measured, "It is not compared: no film of the library was named."];
   const used = formatMeasured({ value: film.stress, tolerance: film.stressTolerance, source: film.source }, "stress", {
     unit: "MPa",
@@ -47,5 +52,5 @@ function against({ stress, stressTolerance }: LibraryFilm, result: ScanResult): 
   const together = Math.hypot(COVERAGE * result.stressUncertainty, stressTolerance ?? 0);
   if (Math.abs(difference) <= together) return ": the two agree.";
   const size = formatQuantity(Math.abs(difference), "stress", { unit: "MPa", significant: 2 });
-  return `: this scan is ${size} ${difference > 0 ? "higher" : "lower"}.`;
+  return `: this scan lies ${size} further towards ${difference > 0 ? "tension" : "compression"}.`;
 }

@@ -11,9 +11,11 @@ export interface ScanRow {
   diameter: number;
   stress: number;
   stressUncertainty: number;
-  /** standard bow, m; null when the wafer has rolled */
-  bowChange: number | null;
+  /** standard bow, m */
+  bowChange: number;
   bowUncertainty: number;
+  /** the wafer has rolled: there is neither a bow nor a stress to show */
+  curled: boolean;
   createdAt: string;
   createdBy: string;
 }

@@ -76,8 +76,9 @@ function rowOf(scan: Scan & { program: { name: string }; createdBy: { name: stri
     diameter: scan.parameters.diameter,
     stress: scan.stress,
     stressUncertainty: scan.stressUncertainty,
-    bowChange: scan.curled ? null : scan.bowChange,
+    bowChange: scan.bowChange,
     bowUncertainty: scan.bowUncertainty,
+    curled: scan.curled,
     createdAt: scan.createdAt.toISOString(),
     createdBy: scan.createdBy.name,
   };

@@ -27,7 +27,7 @@ export function FileField({ field, label, again, onChosen }: Props) {
         accept=".csv,.txt,.dat,.tsv,text/csv,text/plain"
         aria-invalid={fault ? true : undefined}
         aria-describedby={field.errorId}
-        className="file:mr-3 file:cursor-pointer file:border-0 file:bg-transparent file:font-medium file:text-ink file:underline"
+        className="file:mr-3 file:cursor-pointer file:border-0 file:bg-transparent file:font-medium file:text-ink file:underline max-tablet:file:leading-8"
         onChange={(event) => {
           const input = event.currentTarget;
           const file = input.files?.[0];

@@ -12,10 +12,10 @@ export function ScanRemarks({ remarks }: { remarks: ScanRemark[] }) {
       </h2>
       <ul className="mt-1 max-w-240">
         {!cautioned && (
-          <Remark caution={false}>The shape is a parabola, and nothing else stands against the figures.</Remark>
+          <Remark level="clear">The shape is a parabola, and nothing else stands against the figures.</Remark>
         )}
         {remarks.map(({ level, text }) => (
-          <Remark key={text} caution={level === "caution"}>
+          <Remark key={text} level={level === "caution" ? "caution" : null}>
             {noBreak(text)}
           </Remark>
         ))}
@@ -24,14 +24,13 @@ export function ScanRemarks({ remarks }: { remarks: ScanRemark[] }) {
   );
 }
 
-function Remark({ caution, children }: { caution: boolean; children: string }) {
+/** A note has neither hatch nor level: it bears on nothing. */
+function Remark({ level, children }: { level: "clear" | "caution" | null; children: string }) {
   return (
     <li className="flex gap-3 border-t border-line py-2 first:border-0">
-      <span className="mt-0.5">
-        <Swatch level={caution ? "caution" : "clear"} />
-      </span>
+      <span className="mt-0.5 w-[22px] flex-none">{level && <Swatch level={level} />}</span>
       <p>
-        {caution && <b className="text-caution">Caution. </b>}
+        {level === "caution" && <b className="text-caution">Caution. </b>}
         {children}
       </p>
     </li>

@@ -17,6 +17,10 @@ export function ScanView({ scan }: { scan: ScanDetail }) {
   const mm = (metres: number) => formatQuantity(metres, "length", { unit: "mm", significant: 3, trim: true });
   return (
     <div className="frame">
+      <p className="print-only border-b border-line p-4">
+        {label}, program {scan.program.name}. Read {scan.createdAt.slice(0, 10)} by {scan.createdBy}, engine{" "}
+        {scan.engineVersion}.
+      </p>
       <AnswerLine figuresBelow level={2} sentences={scanAnswer(label, film, result)} figures={figuresOf(scan)} />
       <div className="border-t border-ink p-4 tablet:px-6">
         <ScanRemarks remarks={scanRemarks(parameters, result)} />
@@ -33,11 +37,13 @@ export function ScanView({ scan }: { scan: ScanDetail }) {
               summary={`Both scans levelled at the middle, their difference and the parabola fitted to it; ${mm(parameters.edgeExclusion)} at either end left out of the fit, ${result.used} points used.`}
             />
           </section>
-          <div className="grid border-t border-line tablet:grid-cols-2">
+          <div className={`grid border-t border-line ${result.curled ? "" : "tablet:grid-cols-2"}`}>
+            {!result.curled && (
+              <div className="min-w-0 border-line p-4 max-tablet:border-b tablet:border-r tablet:p-6">
+                <ScanBudget result={result} />
+              </div>
+            )}
             <div className="min-w-0 p-4 tablet:p-6">
-              <ScanBudget result={result} />
-            </div>
-            <div className="min-w-0 border-line p-4 max-tablet:border-t tablet:border-l tablet:p-6">
               <ScanWorking working={scan.working} />
             </div>
           </div>
@@ -61,15 +67,7 @@ function figuresOf({ result }: ScanDetail): AnswerFigure[] {
   const left = formatQuantity(rms, "length", { significant: 2 });
   const share = bowChange === 0 ? null : rms / Math.abs(bowChange);
   return [
-    {
-      label: "Stress, k = 2",
-      value: stressText(result),
-      working: (
-        <a href="#working" className="link">
-          Working
-        </a>
-      ),
-    },
+    stressFigure(result),
     {
       label: "Curvature change, k = 2",
       value: curvature,
@@ -88,6 +86,20 @@ function figuresOf({ result }: ScanDetail): AnswerFigure[] {
       ),
     },
   ];
+}
+
+function stressFigure(result: ScanDetail["result"]): AnswerFigure {
+  const working = (
+    <a href="#working" className="link">
+      Working
+    </a>
+  );
+  if (!result.curled) return { label: "Stress, k = 2", value: stressText(result), working };
+  return {
+    label: "Stress",
+    value: "not given",
+    working: <span className="text-quiet">outside the relation’s range</span>,
+  };
 }
 
 /** The bow change; of a wafer that has rolled, the radius of its roll and how far its edges lift. */

@@ -1,8 +1,17 @@
 import { Link } from "react-router";
 import type { Column } from "#app/components/ui/DataTable.tsx";
+import type { Dimension } from "#app/engine/units/dimensions.ts";
 import { formatMeasured } from "#app/lib/format-measured.ts";
 import { COVERAGE } from "#app/lib/scan-answer.ts";
 import type { ScanRow } from "#app/schemas/scan-view.ts";
+
+/** A figure with its expanded uncertainty; the unit stands in the head of the column. */
+const bare = (value: number, uncertainty: number, dimension: Dimension, unit: string) =>
+  formatMeasured({ value, tolerance: COVERAGE * uncertainty, source: "measured here" }, dimension, {
+    unit,
+    sign: true,
+    bare: true,
+  });
 
 /** Columns of the list of scans, by the names of their sorts. */
 export const SCAN_COLUMNS: Column<ScanRow>[] = [
@@ -32,12 +41,8 @@ export const SCAN_COLUMNS: Column<ScanRow>[] = [
     unit: "MPa, k = 2",
     numeric: true,
     sortable: true,
-    cell: ({ stress, stressUncertainty }) =>
-      formatMeasured({ value: stress, tolerance: COVERAGE * stressUncertainty, source: "measured here" }, "stress", {
-        unit: "MPa",
-        sign: true,
-        bare: true,
-      }),
+    cell: ({ curled, stress, stressUncertainty }) =>
+      curled ? "none" : bare(stress, stressUncertainty, "stress", "MPa"),
   },
   {
     key: "bow",
@@ -45,14 +50,8 @@ export const SCAN_COLUMNS: Column<ScanRow>[] = [
     unit: "µm, k = 2",
     numeric: true,
     sortable: true,
-    cell: ({ bowChange, bowUncertainty }) =>
-      bowChange === null
-        ? "rolls up"
-        : formatMeasured(
-            { value: bowChange, tolerance: COVERAGE * bowUncertainty, source: "measured here" },
-            "length",
-            { unit: "µm", sign: true, bare: true },
-          ),
+    cell: ({ curled, bowChange, bowUncertainty }) =>
+      curled ? "rolls up" : bare(bowChange, bowUncertainty, "length", "µm"),
   },
   { key: "program", head: "Program", sortable: true, wide: true, cell: ({ program }) => program },
   {

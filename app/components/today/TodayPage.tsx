@@ -99,6 +99,6 @@ function exaggerationOf(rows: TodayAssessed[], scans: ScanRow[]): number {
     const shape = wafer ? lyingAs(wafer.shape) : null;
     return shape?.kind === "bowed" && diameter > 0 ? [shape.bow / diameter] : [];
   });
-  const scanned = scans.map(({ bowChange, diameter }) => (bowChange ?? 0) / diameter);
+  const scanned = scans.map(({ curled, bowChange, diameter }) => (curled ? 0 : bowChange / diameter));
   return chooseExaggeration([...lying, ...scanned], 1);
 }

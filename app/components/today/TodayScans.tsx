@@ -31,7 +31,7 @@ export function TodayScans({ scans, mayUpload, exaggeration }: Props) {
                 </span>
               }
               drawing={
-                scan.bowChange !== null && (
+                !scan.curled && (
                   <BowLine
                     diameter={scan.diameter}
                     shape={{ kind: "bowed", bow: scan.bowChange }}
@@ -46,7 +46,9 @@ export function TodayScans({ scans, mayUpload, exaggeration }: Props) {
               }
               action={{ words: "See scan", to: `/scans/${scan.id}` }}
             >
-              {`${stressText(scan)}, ${senseOf(scan)}; ${scan.bowChange === null ? "rolls up" : bowWord(scan.bowChange, scan.bowUncertainty)}. `}
+              {scan.curled
+                ? "The wafer has rolled up: no stress, no bow. "
+                : `${stressText(scan)}, ${senseOf(scan)}; ${bowWord(scan.bowChange, scan.bowUncertainty)}. `}
               <span className="text-quiet">{scan.program}</span>
             </TodayRow>
           ))}

@@ -67,8 +67,10 @@ describe("the answer", () => {
   it("agree up to the root sum of squares of the two intervals, and not beyond", () => {
     const together = Math.hypot(1.4e6, 3e6);
     expect(answer({ stress: 30e6 + together * 0.999 })[1]).toContain("the two agree");
-    expect(answer({ stress: 30e6 + together * 1.001 })[1]).toContain("this scan is 3.3 MPa higher");
-    expect(answer({ stress: 30e6 - together * 1.001 })[1]).toContain("this scan is 3.3 MPa lower");
+    expect(answer({ stress: 30e6 + together * 1.001 })[1]).toContain("this scan lies 3.3 MPa further towards tension");
+    expect(answer({ stress: 30e6 - together * 1.001 })[1]).toContain(
+      "this scan lies 3.3 MPa further towards compression",
+    );
   });
 
   it("says when the library's value is assumed", () => {
@@ -76,6 +78,12 @@ describe("the answer", () => {
     expect(scanAnswer("M-0388", assumed, RESULT).map(plain)[1]).toBe(
       "The library uses 30 MPa, assumed: the two agree.",
     );
+  });
+
+  it("is that there is no stress, once the wafer has rolled up", () => {
+    expect(answer({ curled: { rollRadius: 0.3, edgeLift: 0.01 } })).toEqual([
+      "Polymer dielectric A: the wafer has rolled up, so these scans give no film stress.",
+    ]);
   });
 
   it("names the wafer where no film was named", () => {
