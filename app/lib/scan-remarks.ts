@@ -23,32 +23,39 @@ const SHORT_SCAN = 0.8;
 const percent = (share: number) => `${formatQuantity(share, "fraction", { unit: "%", significant: 2, trim: true })}`;
 const mm = (metres: number) => formatQuantity(metres, "length", { unit: "mm", significant: 3, trim: true });
 
-/** What stands against trusting a scan's figures, the weightiest first; empty when nothing does. */
+/**
+ * What stands against trusting a scan's figures, the weightiest first; empty when nothing does. Of a wafer that has rolled there
+ * is no stress and no bow, so nothing is said about how good they are.
+ */
 export function scanRemarks(parameters: ScanParameters, result: ScanResult): ScanRemark[] {
-  const found: (ScanRemark | null)[] = [
-    ...shapeRemarks(result),
-    ...thicknessRemarks(parameters),
-    missingTolerances(result),
-    Math.abs(result.stress) <= COVERAGE * result.stressUncertainty
-      ? caution("The stress is smaller than its uncertainty: this pair of scans cannot tell it from zero.")
-      : null,
-    shortScan(parameters, result),
-    result.rejected > 0 ? note(leftOut(result)) : null,
-    result.steep ? note("The scan is steeper than 0.03, so circles were fitted instead of parabolas.") : null,
-  ];
+  const found = result.curled
+    ? [ROLLED, ...handlingRemarks(parameters), ...fitRemarks(result)]
+    : [
+        ...shapeRemarks(result),
+        ...handlingRemarks(parameters),
+        thickFilm(parameters),
+        missingTolerances(result),
+        insideUncertainty(result),
+        shortScan(parameters, result),
+        ...fitRemarks(result),
+      ];
   return found.filter((remark) => remark !== null);
 }
 
-const caution = (text: string): ScanRemark => ({ level: "caution", text });
-const note = (text: string): ScanRemark => ({ level: "note", text });
+function caution(text: string): ScanRemark {
+  return { level: "caution", text };
+}
 
-function shapeRemarks({ curled, understatedBy, quartic }: ScanResult): (ScanRemark | null)[] {
+function note(text: string): ScanRemark {
+  return { level: "note", text };
+}
+
+const ROLLED = caution(
+  "A free wafer of this thickness cannot hold that curvature as a bowl: it has rolled about one axis, where the thin-film relation does not hold. Neither a stress nor a bow is given.",
+);
+
+function shapeRemarks({ understatedBy, quartic }: ScanResult): (ScanRemark | null)[] {
   return [
-    curled
-      ? caution(
-          "A free wafer of this thickness cannot hold that curvature as a bowl: it has rolled about one axis. The stress is far outside the range of the thin-film relation; do not use it.",
-        )
-      : null,
     understatedBy !== null && understatedBy >= UNDERSTATED_FROM
       ? caution(
           `The bow is large for this silicon, which is then stiffer than the thin-film relation assumes: the stress is understated by about ${percent(understatedBy)}.`,
@@ -62,8 +69,7 @@ function shapeRemarks({ curled, understatedBy, quartic }: ScanResult): (ScanRema
   ];
 }
 
-function thicknessRemarks({ siliconThickness, filmThickness }: ScanParameters): (ScanRemark | null)[] {
-  const off = (THICK_FILM * filmThickness) / siliconThickness;
+function handlingRemarks({ siliconThickness }: ScanParameters): (ScanRemark | null)[] {
   return [
     siliconThickness < CONTACT_FROM
       ? caution("Silicon below 300 µm: a stylus presses it out of shape. Scan without contact, or on thicker silicon.")
@@ -73,11 +79,26 @@ function thicknessRemarks({ siliconThickness, filmThickness }: ScanParameters): 
           "Silicon below about 100 µm is outside the scope of the standards for bow and warp, SEMI MF534 and MF1390: say how it was held when you quote the figure.",
         )
       : null,
-    off >= WORTH_SAYING
-      ? caution(
-          `The film is thick for this silicon: if it is as stiff, the thin-film relation is about ${percent(off)} off.`,
-        )
-      : null,
+  ];
+}
+
+function thickFilm({ siliconThickness, filmThickness }: ScanParameters): ScanRemark | null {
+  const off = (THICK_FILM * filmThickness) / siliconThickness;
+  if (off < WORTH_SAYING) return null;
+  return caution(
+    `The film is thick for this silicon: if it is as stiff, the thin-film relation is about ${percent(off)} off.`,
+  );
+}
+
+function insideUncertainty({ stress, stressUncertainty }: ScanResult): ScanRemark | null {
+  if (Math.abs(stress) > COVERAGE * stressUncertainty) return null;
+  return caution("The stress is smaller than its uncertainty: this pair of scans cannot tell it from zero.");
+}
+
+function fitRemarks(result: ScanResult): (ScanRemark | null)[] {
+  return [
+    result.rejected > 0 ? note(leftOut(result)) : null,
+    result.steep ? note("The scan is steeper than 0.03, so circles were fitted instead of parabolas.") : null,
   ];
 }
 

@@ -37,16 +37,16 @@ export function ScanView({ scan }: { scan: ScanDetail }) {
               summary={`Both scans levelled at the middle, their difference and the parabola fitted to it; ${mm(parameters.edgeExclusion)} at either end left out of the fit, ${result.used} points used.`}
             />
           </section>
-          <div className={`grid border-t border-line ${result.curled ? "" : "tablet:grid-cols-2"}`}>
-            {!result.curled && (
-              <div className="min-w-0 border-line p-4 max-tablet:border-b tablet:border-r tablet:p-6">
+          {!result.curled && (
+            <div className="grid border-t border-line tablet:grid-cols-2">
+              <div className="min-w-0 p-4 tablet:p-6">
                 <ScanBudget result={result} />
               </div>
-            )}
-            <div className="min-w-0 p-4 tablet:p-6">
-              <ScanWorking working={scan.working} />
+              <div className="min-w-0 border-line p-4 max-tablet:border-t tablet:border-l tablet:p-6">
+                <ScanWorking working={scan.working} />
+              </div>
             </div>
-          </div>
+          )}
         </div>
         <div className="min-w-0 space-y-6 border-ink p-4 max-wide:border-t tablet:p-6 wide:border-l">
           <ScanInputs parameters={parameters} />
@@ -65,7 +65,7 @@ function figuresOf({ result }: ScanDetail): AnswerFigure[] {
     sign: true,
   });
   const left = formatQuantity(rms, "length", { significant: 2 });
-  const share = bowChange === 0 ? null : rms / Math.abs(bowChange);
+  const share = result.curled || bowChange === 0 ? null : rms / Math.abs(bowChange);
   return [
     stressFigure(result),
     {

@@ -160,10 +160,15 @@ describe("remarks", () => {
     );
   });
 
-  it("a wafer that has rolled: first of all, do not use the stress", () => {
-    const found = remarks({ curled: { rollRadius: 0.3, edgeLift: 0.01 }, understatedBy: null, quartic: 0.2 });
-    expect(found[0]).toMatch(/^caution: .*rolled about one axis.*do not use it/);
-    expect(found).toHaveLength(2);
+  it("a wafer that has rolled: neither stress nor bow, and nothing about how good they are", () => {
+    const rolled = { curled: { rollRadius: 0.3, edgeLift: 0.01 }, understatedBy: null, quartic: 0.2, stress: 0 };
+    const found = remarks({ ...rolled, from: 0, to: 0.05, rejected: 1, rejectedAt: [0] }, { siliconThickness: 80e-6 });
+    expect(found[0]).toMatch(/^caution: .*rolled about one axis.*Neither a stress nor a bow is given/);
+    expect(found.slice(1).map((text) => text.slice(0, 30))).toEqual([
+      "caution: Silicon below 300 µm:",
+      "caution: Silicon below about 1",
+      "note: The fit left out 1 point",
+    ]);
   });
 });
 
