@@ -1,7 +1,7 @@
 import { readFileSync } from "node:fs";
 import { beforeAll, describe, expect, test } from "vitest";
 import type { ScanValues } from "#app/schemas/scan.ts";
-import { monitorProfile, profileCsv } from "#tests/fixtures/monitor-profile.ts";
+import { MONITOR_PARAMETERS, monitorProfile, profileCsv } from "#tests/fixtures/monitor-profile.ts";
 import { leave, scopeOfPerson } from "#tests/db/people.ts";
 import { asOwner, useDatabase } from "#tests/db/test-database.ts";
 
@@ -32,16 +32,7 @@ async function values(label: string, changes: Partial<ScanValues> = {}): Promise
     program: await idOf("program", "Tern"),
     label,
     film: await idOf("film", "Polymer dielectric A"),
-    orientation: "100",
-    filmThickness: 5e-6,
-    filmThicknessTolerance: 5e-8,
-    siliconThickness: 725e-6,
-    siliconThicknessTolerance: 1.5e-6,
-    diameter: 0.2,
-    edgeExclusion: 5e-3,
-    positionUnit: "mm",
-    heightUnit: "µm",
-    decimalMark: "point",
+    ...MONITOR_PARAMETERS,
     ...changes,
   };
 }

@@ -7,20 +7,9 @@ import type { ScanDetail } from "#app/schemas/scan-view.ts";
 import { scanResult } from "#app/services/scan-result-of.ts";
 import { render, words } from "#tests/components/drawings/render.ts";
 import { strangeCharacters } from "#tests/components/glyphs.ts";
-import { MONITOR, monitorProfile, profileCsv } from "#tests/fixtures/monitor-profile.ts";
+import { MONITOR, MONITOR_PARAMETERS, monitorProfile, profileCsv } from "#tests/fixtures/monitor-profile.ts";
 
-const PARAMETERS: ScanDetail["parameters"] = {
-  orientation: "100",
-  filmThickness: MONITOR.filmThickness,
-  filmThicknessTolerance: null,
-  siliconThickness: MONITOR.substrateThickness,
-  siliconThicknessTolerance: 1.5e-6,
-  diameter: MONITOR.diameter,
-  edgeExclusion: 5e-3,
-  positionUnit: "mm",
-  heightUnit: "µm",
-  decimalMark: "point",
-};
+const PARAMETERS = { ...MONITOR_PARAMETERS, filmThicknessTolerance: null };
 
 function detail(tail: string): ScanDetail {
   const read = (which: "before" | "after") =>

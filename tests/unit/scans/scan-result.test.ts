@@ -4,29 +4,27 @@
  *   σ, u(σ)   film stress and its standard uncertainty         Pa
  */
 import { describe, expect, it } from "vitest";
-import { readProfile, type ProfileFormat } from "#app/lib/profile-csv.ts";
+import { readProfile } from "#app/lib/profile-csv.ts";
 import type { ScanValues } from "#app/schemas/scan.ts";
 import { scanResult } from "#app/services/scan-result-of.ts";
-import { FILM_CURVATURE, MONITOR, monitorProfile, profileCsv } from "#tests/fixtures/monitor-profile.ts";
+import {
+  FILM_CURVATURE,
+  MONITOR,
+  MONITOR_PARAMETERS,
+  monitorProfile,
+  profileCsv,
+} from "#tests/fixtures/monitor-profile.ts";
 
-const FORMAT: ProfileFormat = { positionUnit: "mm", heightUnit: "µm", decimalMark: "point" };
 const VALUES: ScanValues = {
   program: "00000000-0000-4000-8000-000000000000",
   label: "M-0388",
   film: null,
-  orientation: "100",
-  filmThickness: MONITOR.filmThickness,
-  filmThicknessTolerance: 0.05e-6,
-  siliconThickness: MONITOR.substrateThickness,
-  siliconThicknessTolerance: 1.5e-6,
-  diameter: MONITOR.diameter,
-  edgeExclusion: 5e-3,
-  ...FORMAT,
+  ...MONITOR_PARAMETERS,
 };
 
 type Points = { x: number; z: number }[];
 const profile = (points: Points) =>
-  readProfile(new TextEncoder().encode(profileCsv(points, { heightPerMetre: 1e6 })), "scan.csv", FORMAT);
+  readProfile(new TextEncoder().encode(profileCsv(points, { heightPerMetre: 1e6 })), "scan.csv", VALUES);
 const resultOf = (before: Points, after: Points, values: Partial<ScanValues> = {}) =>
   scanResult({ ...VALUES, ...values }, profile(before), profile(after));
 const measured = (values: Partial<ScanValues> = {}) =>

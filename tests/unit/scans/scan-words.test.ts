@@ -5,6 +5,7 @@ import { fileSize } from "#app/lib/file-size.ts";
 import { bowWord, scanAnswer, senseOf } from "#app/lib/scan-answer.ts";
 import { scanRemarks } from "#app/lib/scan-remarks.ts";
 import type { ScanParameters, ScanResult } from "#app/schemas/scan-result.ts";
+import { MONITOR_PARAMETERS } from "#tests/fixtures/monitor-profile.ts";
 
 const plain = (text: string) => text.replaceAll("\u00A0", " ");
 
@@ -38,18 +39,6 @@ const RESULT: ScanResult = {
   before: { ...READING, skipped: [], skippedInAll: 0 },
   after: { ...READING, skipped: [], skippedInAll: 0 },
   curve: [],
-};
-const PARAMETERS: ScanParameters = {
-  orientation: "100",
-  filmThickness: 5e-6,
-  filmThicknessTolerance: 5e-8,
-  siliconThickness: 725e-6,
-  siliconThicknessTolerance: 1.5e-6,
-  diameter: 0.2,
-  edgeExclusion: 5e-3,
-  positionUnit: "mm",
-  heightUnit: "µm",
-  decimalMark: "point",
 };
 const FILM = { name: "Polymer dielectric A", stress: 30e6, stressTolerance: 3e6, source: "measured here" as const };
 
@@ -107,7 +96,7 @@ describe("the answer", () => {
 
 describe("remarks", () => {
   const remarks = (result: Partial<ScanResult> = {}, parameters: Partial<ScanParameters> = {}) =>
-    scanRemarks({ ...PARAMETERS, ...parameters }, { ...RESULT, ...result }).map(
+    scanRemarks({ ...MONITOR_PARAMETERS, ...parameters }, { ...RESULT, ...result }).map(
       ({ level, text }) => `${level}: ${plain(text)}`,
     );
 
