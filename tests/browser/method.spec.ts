@@ -19,6 +19,8 @@ test("the method page leads to equations, rules, cautions and words by their anc
 
 for (const scheme of ["light", "dark"] as const)
   test(`axe finds nothing on the method page, ${scheme}`, async ({ page }) => {
+    // The longest page of all.
+    test.slow();
     await page.emulateMedia({ colorScheme: scheme });
     await signIn(page, "engineer");
     await page.goto("/method");

@@ -34,10 +34,12 @@ export default function Scans({ loaderData }: Route.ComponentProps) {
       Upload scans
     </Link>
   );
+  // One filled button a page: where nothing is there yet it stands with the words that say what belongs here.
+  const empty = page.total === 0 && !searched;
   const counted = page.total === 1 ? "1 scan" : `${page.total} scans`;
   return (
     <>
-      <PageHead title="Scans" remark={searched ? `${page.total} found` : counted} actions={upload} />
+      <PageHead title="Scans" remark={searched ? `${page.total} found` : counted} actions={!empty && upload} />
       <ListHead what="wafers, films and people" filters={[{ name: "program", label: "Program", options: programs }]} />
       {page.rows.length > 0 ? (
         <>
@@ -48,7 +50,7 @@ export default function Scans({ loaderData }: Route.ComponentProps) {
           </p>
         </>
       ) : (
-        <EmptyState title={searched ? "No scan fits" : "No scans yet"} actions={upload}>
+        <EmptyState title={searched ? "No scan fits" : "No scans yet"} actions={empty && upload}>
           {searched
             ? "Change the search, or take a filter away."
             : "A profile across a monitor wafer before a film and one after it belong here. From the two come the film’s stress with its uncertainty and the bow that it makes."}
