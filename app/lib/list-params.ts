@@ -11,6 +11,9 @@ export interface ListParams {
 
 export const PAGE_SIZE = 25;
 
+/** Text of an address for the database, which knows no NUL. */
+const plain = (text: string | null) => (text ?? "").replaceAll("\0", "").trim().slice(0, 100);
+
 /** Reads a list's parameters; anything not understood falls back to the first of `sorts`, ascending, first page. */
 export function readListParams(
   search: URLSearchParams,
@@ -25,16 +28,13 @@ export function readListParams(
   const known = sorts.includes(name);
   const page = Number.parseInt(search.get("page") ?? "", 10);
   return {
-    query: plain(search.get("q")).trim(),
+    query: plain(search.get("q")),
     sort: known ? name : (sorts[0] ?? ""),
     descending: known ? asked.startsWith("-") : descending,
     page: Number.isInteger(page) && page > 0 ? Math.min(page, 100_000) : 1,
     filters: Object.fromEntries(filters.map((key) => [key, plain(search.get(key))])),
   };
 }
-
-/** Text from the address without characters that no database text can hold, at most 100 long. */
-const plain = (text: string | null) => (text ?? "").replace(/\p{Cc}/gu, " ").slice(0, 100);
 
 /** One page of a list with the number of all that match. */
 export interface ListPage<Row> {

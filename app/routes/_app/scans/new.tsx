@@ -4,7 +4,7 @@ import { ScanForm } from "#app/components/scans/ScanForm.tsx";
 import { LARGEST_FILE, LARGEST_FILE_WORDS, tooLargeSentence } from "#app/lib/scan-file.ts";
 import { scanSchema } from "#app/schemas/scan.ts";
 import { scopeOf } from "#app/server/contexts.server.ts";
-import { parseForm } from "#app/server/form.server.ts";
+import { parseForm } from "#app/server/parse-form.server.ts";
 import { readUpload, type Upload } from "#app/server/upload.server.ts";
 import { allOfLibrary } from "#app/services/library/library.server.ts";
 import { uploadScan } from "#app/services/scan-upload.server.ts";
