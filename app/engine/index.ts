@@ -59,7 +59,9 @@ export { criticalFilmForceWorking, freeWaferShapeWorking } from "./plate/working
 
 // Scans and uncertainty
 export type { ProfilePoint } from "./profile/points.ts";
+export { commonPoints, type ScanPair } from "./profile/common-points.ts";
 export { fitProfile, type FitOptions, type ProfileFit } from "./profile/fit-profile.ts";
+export { fittedHeight, levelHeight } from "./profile/fitted-height.ts";
 export {
   filmStressFromCurvature,
   filmStressFromProfiles,
