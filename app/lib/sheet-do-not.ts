@@ -24,8 +24,8 @@ export interface DoNotContext {
 export function doNotLines(group: SheetGroup, context: DoNotContext): string[] {
   const lines = [
     ...blockedLines(group, context),
-    ...touchLines(group),
     ...liftLines(group),
+    ...touchLines(group),
     ...releaseLines(group, context.flow),
     ...heatLines(group, context),
     ...vacuumLines(group, context),
@@ -45,23 +45,25 @@ const BLOCKED: Record<number, string> = {
 
 function whyBlocked(step: StepResult, { rule, outcome }: Finding, tapeTemperature: number): string {
   if (outcome === "cannot judge") return "an input is missing";
-  if (rule === 12 && onTape(step.planned)) {
+  if ((rule === 8 || rule === 12) && onTape(step.planned)) {
     if (step.peakTemperature > tapeTemperature) return "it is too hot for the tape";
     if (step.exposures.includes("vacuum") || step.exposures.includes("plasma")) return "tape takes no vacuum";
   }
   return BLOCKED[rule] ?? "the assessment stops it";
 }
 
-/** Steps that the same thing stops stand together. */
+/** Each step that is stopped, once, for the first of its reasons; steps that the same thing stops stand together. */
 function blockedLines({ steps }: SheetGroup, { findings, tapeTemperature }: DoNotContext): string[] {
   const found = new Map<string, number[]>();
-  for (const step of steps)
-    for (const finding of findings) {
-      if (finding.step !== step.number || outcomeRank(finding.outcome) < outcomeRank("needs support")) continue;
-      const why = whyBlocked(step, finding, tapeTemperature);
-      const known = found.get(why) ?? [];
-      if (!known.includes(step.number)) found.set(why, [...known, step.number]);
-    }
+  for (const step of steps) {
+    const blocking = findings.filter(
+      ({ step: number, outcome }) => number === step.number && outcomeRank(outcome) >= outcomeRank("needs support"),
+    );
+    const [first] = blocking.sort((a, b) => a.rule - b.rule);
+    if (!first) continue;
+    const why = whyBlocked(step, first, tapeTemperature);
+    found.set(why, [...(found.get(why) ?? []), step.number]);
+  }
   return [...found].map(([why, numbers]) => `Do not run ${stepsInWords(numbers)}: ${why}`);
 }
 
