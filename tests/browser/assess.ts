@@ -14,7 +14,8 @@ export async function openTern(page: Page): Promise<void> {
 /** Assesses the flow that is open and stays at the assessment, whose path it returns. */
 export async function assess(page: Page): Promise<string> {
   await page.getByRole("button", { name: "Assess", exact: true }).click();
-  await expect(page).toHaveURL(/\/assessments\/[0-9a-f-]+$/);
+  // The first one after a start takes a while longer: nothing is compiled yet.
+  await expect(page).toHaveURL(/\/assessments\/[0-9a-f-]+$/, { timeout: 20_000 });
   return new URL(page.url()).pathname;
 }
 
