@@ -22,7 +22,7 @@ test.describe("an engineer", () => {
     await expect(page).toHaveURL(/\?step=8$/);
     await expect(strip.getByRole("link", { name: /^Step 8,/ })).toHaveAttribute("aria-current", "step");
     const details = page.getByRole("row").filter({ hasText: "Lies as" }).last();
-    const shown = await details.getByText(/^Edges up/).innerText();
+    const shown = await details.getByText(/^Edges up .* at 25/).innerText();
 
     await details.getByRole("link", { name: "Working of lies as" }).click();
     await expect(page).toHaveURL(new RegExp(`${path}/working\\?step=8&shape=loaded$`));

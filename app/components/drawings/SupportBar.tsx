@@ -30,7 +30,7 @@ export function SupportBar(props: SupportBarProps) {
 
 function LineBar(props: SupportBarProps) {
   const { required, planned, outcomes, label, variant } = props;
-  const { sizes, columnWidth, height, narrowWords, lineHeight, hasRoomForTitle } = lineBarLayout(props);
+  const { sizes, columnWidth, height, numbered, narrowWords, lineHeight, hasRoomForTitle } = lineBarLayout(props);
   const { width, gutter, text, numberY, headY, bar, plannedY, line, thin, extension } = sizes;
   const narrowY = height - narrowWords.length * lineHeight;
   return (
@@ -40,14 +40,16 @@ function LineBar(props: SupportBarProps) {
           {index === 0 ? null : (
             <path d={`M${gutter + index * columnWidth} 0V${headY}`} stroke={colour("ink")} strokeWidth={line} />
           )}
-          <text
-            x={gutter + (index + 0.5) * columnWidth}
-            y={numberY}
-            textAnchor="middle"
-            style={{ fontSize: text, fontWeight: 600 }}
-          >
-            {numberAt(props, index)}
-          </text>
+          {index === 0 || numberAt(props, index) % numbered === 0 ? (
+            <text
+              x={gutter + (index + 0.5) * columnWidth}
+              y={numberY}
+              textAnchor="middle"
+              style={{ fontSize: text, fontWeight: 600 }}
+            >
+              {numberAt(props, index)}
+            </text>
+          ) : null}
         </g>
       ))}
       <path d={`M0 ${headY}H${width}`} stroke={colour("ink")} strokeWidth={line} />

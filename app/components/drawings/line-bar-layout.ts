@@ -56,6 +56,8 @@ const PAPER: LineBarSizes = {
   extension: [12, 7],
 };
 
+const NUMBERED = [1, 2, 5, 10, 20];
+
 export const PLANNED_TITLE = "Planned support";
 
 /** Number of a step: its own where given, else its place. */
@@ -70,10 +72,13 @@ export function lineBarLayout(bar: LineBar) {
   const columnWidth = (width - 2 * gutter) / bar.required.length;
   const narrow = bar.variant === "paper" ? narrowWords(bar, columnWidth, text, width - 8) : [];
   const lineHeight = text * 1.25;
+  const widest = textWidth(String(numberAt(bar, bar.required.length - 1)), text, true) + 4;
   const noneBefore = bar.planned.findIndex((each) => each !== null);
   return {
     sizes,
     columnWidth,
+    /** Numbers that would touch are left out: every second one stands, or every fifth. */
+    numbered: NUMBERED.find((every) => every * columnWidth >= widest) ?? 50,
     narrowWords: narrow,
     lineHeight,
     hasRoomForTitle: noneBefore < 0 || noneBefore * columnWidth > textWidth(PLANNED_TITLE, text) + 8,

@@ -19,7 +19,7 @@ interface Row {
   outcome: Outcome;
   createdAt: string;
   createdBy: string;
-  outOfDate: boolean;
+  flowChanged: boolean;
 }
 
 const columns: Column<Row>[] = [
@@ -33,12 +33,12 @@ const columns: Column<Row>[] = [
     key: "flow",
     head: "Flow",
     sortable: true,
-    cell: ({ id, flow, outOfDate }) => (
+    cell: ({ id, flow, flowChanged }) => (
       <>
         <Link to={`/assessments/${id}`} className="link">
           {flow}
         </Link>
-        {outOfDate ? <span className="block text-label text-caution">changed since it was assessed</span> : null}
+        {flowChanged ? <span className="block text-label text-caution">changed since it was assessed</span> : null}
       </>
     ),
   },

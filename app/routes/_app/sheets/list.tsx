@@ -2,7 +2,7 @@ import { SheetList } from "#app/components/sheet/SheetList.tsx";
 import { readListParams } from "#app/lib/list-params.ts";
 import { programsWhere } from "#app/policies/permissions.ts";
 import { scopeOf } from "#app/server/contexts.server.ts";
-import { ASSESSMENT_SORTS, listNewestAssessments } from "#app/services/assessments/assessments.server.ts";
+import { ASSESSMENT_SORTS, listNewestAssessments } from "#app/services/assessments/newest-assessments.server.ts";
 import type { Route } from "./+types/list";
 
 export const meta: Route.MetaFunction = () => [{ title: "Sheets · Planeward" }];
