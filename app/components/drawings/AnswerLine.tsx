@@ -50,7 +50,10 @@ export function AnswerLine({ outcome, where, sentences, figures, level = 1, figu
         }`}
       >
         {figures.map((figure) => (
-          <div key={figure.label} className="-mt-px -ml-px border-t border-l border-line px-4 py-2 tablet:py-3">
+          <div
+            key={figure.label}
+            className="-mt-px -ml-px border-t border-l border-line px-3 py-2 tablet:px-4 tablet:py-3"
+          >
             <dt className="text-label text-quiet">{figure.label}</dt>
             <dd>
               <span className="block text-figure font-medium">{noBreak(figure.value)}</span>

@@ -31,7 +31,7 @@ export function supportSpans(steps: AssessedStep[]): SupportSpan[] {
 }
 
 /** The step that comes nearest to, or farthest beyond, its tool's warp limit. */
-export function tightestStep({ findings }: FlowAssessment) {
+export function tightestStep({ findings }: Pick<FlowAssessment, "findings">) {
   const warps = findings.filter(({ rule, limit, figures }) => rule === 2 && limit && figures[0]);
   const use = (finding: (typeof warps)[number]) =>
     (finding.figures[0]?.value ?? 0) / (finding.limit?.value ?? Infinity);
