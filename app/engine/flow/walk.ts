@@ -54,14 +54,14 @@ export function walkFlow(flow: FlowInput, limits: SiteLimits, options: WalkOptio
     try {
       const applied = applyStep(before, step, field);
       const bonded = applied.bond !== null;
-      const hot = settle(applied, orientation, step.peakTemperature, { metalHistory });
-      const cold = settle(hot.state, orientation, ROOM_TEMPERATURE, { metalHistory });
+      const flat = heldFlat(step.planned);
+      const hot = settle(applied, orientation, step.peakTemperature, { metalHistory, heldFlat: flat });
+      const cold = settle(hot.state, orientation, ROOM_TEMPERATURE, { metalHistory, heldFlat: flat });
       state = cold.state;
       const bare = layersOf(state, orientation, ROOM_TEMPERATURE, { carrier: false });
       const free = bonded ? solveLaminate(bare.layers, { temperature: ROOM_TEMPERATURE }) : cold.solution;
       const shape = (at: Settled, temperature: number) =>
         lyingShape(flow.wafer, at.layers, at.solution, temperature, bonded);
-      const flat = heldFlat(step.planned);
       const atRoom = flat ? null : shape(cold, ROOM_TEMPERATURE);
       const heated = step.peakTemperature > ROOM_TEMPERATURE;
       return {
