@@ -87,10 +87,11 @@ function againstRequired(
       required.limit,
     );
   const tool = equipment?.leastUnsupportedThickness ?? null;
-  if (equipment && tool && planned === "bare" && !reaches(least, tool.value))
+  const onTool = tool && planned === "bare" ? againstLowerLimit(least, tool.value, 0, "needs support") : "clear";
+  if (equipment && tool && onTool !== "clear")
     return {
       ...make(
-        "needs support",
+        onTool,
         `${equipment.name} takes unsupported silicon from ${um(tool.value)}; here it is ${um(least)}.`,
         "Plan support for this step, or use a tool that takes thinner silicon.",
         null,
