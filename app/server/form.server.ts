@@ -33,3 +33,8 @@ export function refusal<Value>(submission: Submission<Value>, saved: Saved | nul
   const problem = saved && saveProblem(saved, what);
   return { lastResult: submission.reply(problem ?? {}), version };
 }
+
+/** Status of an answer to a form that was not saved: a fault in it, or only a line of a list added, moved or taken out. */
+export function statusOf({ status }: Pick<Submission<unknown>, "status">): 200 | 400 {
+  return status === "error" ? 400 : 200;
+}
