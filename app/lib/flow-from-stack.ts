@@ -1,5 +1,6 @@
 import type { FilmKind } from "#app/engine/flow/model.ts";
 import type { Measured } from "#app/engine/measured.ts";
+import { exceeds, reaches } from "#app/engine/rules/against-limit.ts";
 import { formatQuantity } from "#app/engine/units/format.ts";
 import type { Exposure, Holding, Side } from "#app/engine/vocabulary.ts";
 import type { StepValues } from "#app/schemas/flow.ts";
@@ -68,12 +69,13 @@ const CARRIER_BELOW = um(50);
 /** Left by the grind for the stress relief to take off. */
 const RELIEF = um(10);
 
-const isThinned = ({ incoming, target }: Pick<StackStart, "incoming" | "target">) => target.value < incoming.value;
+const isThinned = ({ incoming, target }: Pick<StackStart, "incoming" | "target">) =>
+  exceeds(incoming.value, target.value);
 
 /** Whether the thinning goes onto a carrier: below 50 µm, or when back-side films follow it. On tape otherwise. */
 export function needsCarrier(start: Pick<StackStart, "incoming" | "target" | "films">): boolean {
   if (!isThinned(start)) return false;
-  return start.target.value < CARRIER_BELOW || start.films.some(({ side }) => side === "back");
+  return !reaches(start.target.value, CARRIER_BELOW) || start.films.some(({ side }) => side === "back");
 }
 
 /** A step by what it differs in from one that does nothing, and the name of its tool. */
@@ -134,7 +136,7 @@ function filmStep({ id, name, kind, side, thickness, stress, coverage }: StackFi
         films,
       };
     case "metal":
-      if (thickness.value > um(1) && !back)
+      if (exceeds(thickness.value, um(1)) && !back)
         return {
           kind: "plate",
           title: `Plate ${what}`,
@@ -188,13 +190,13 @@ function thinning({ incoming, target }: StackStart, planned: Holding): Sketch[] 
     siliconAfter: target,
     groundFaceForce: assumed(-5, 2.5),
   };
-  return ground < incoming.value ? [grind, relief] : [relief];
+  return exceeds(incoming.value, ground) ? [grind, relief] : [relief];
 }
 
 const inMicrometres = (length: number) => formatQuantity(length, "length", { unit: "µm" }).replaceAll("\u00A0", " ");
 
 function trim({ target }: StackStart): Sketch[] {
-  if (target.value >= TRIM_BELOW) return [];
+  if (reaches(target.value, TRIM_BELOW)) return [];
   return [
     {
       kind: "edge trim",

@@ -2,11 +2,45 @@ import type { Submission } from "@conform-to/react";
 import { parseWithZod } from "@conform-to/zod/v4";
 import type { z } from "zod";
 import type { Saved } from "#app/services/record.server.ts";
+import { problem } from "./problem.server.ts";
+
+/** Name under which a form without a reload says that it only adds, moves or removes a row. */
+const INTENT = "__intent__";
+
+/** A form as its schema understands it. An intent that no form of ours sends is passed over. */
+export function parseForm<Schema extends z.ZodType>(formData: FormData, schema: Schema) {
+  const intent = formData.get(INTENT);
+  if (intent !== null && !isIntent(intent)) formData.delete(INTENT);
+  return parseWithZod(formData, { schema });
+}
+
+function isIntent(text: FormDataEntryValue): boolean {
+  try {
+    const intent: unknown = JSON.parse(String(text));
+    return typeof intent === "object" && intent !== null && "type" in intent && "payload" in intent;
+  } catch {
+    return false;
+  }
+}
+
+/**
+ * The fields of a posted form. NUL, which the database does not know, is taken out of texts.
+ * @throws 400 for a request that is no form
+ */
+export async function postedForm(request: Request): Promise<FormData> {
+  const formData = new FormData();
+  const posted = await request.formData().catch(() => {
+    throw problem(400, "What was sent is not a form. Open the page again and send its form.");
+  });
+  for (const [name, value] of posted)
+    formData.append(name, typeof value === "string" ? value.replaceAll("\0", "") : value);
+  return formData;
+}
 
 /** A posted form as its schema understands it. */
 export async function readForm<Schema extends z.ZodType>(request: Request, schema: Schema) {
-  const formData = await request.formData();
-  return { formData, submission: parseWithZod(formData, { schema }) };
+  const formData = await postedForm(request);
+  return { formData, submission: parseForm(formData, schema) };
 }
 
 /** The hidden version of a record's form; null for a new record. */

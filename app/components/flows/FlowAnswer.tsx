@@ -34,7 +34,8 @@ export function FlowAnswer({ assessments, mayAssess }: { assessments: FlowAssess
             </h2>
             {newest.outOfDate && (
               <p className="mt-2 font-semibold text-caution">
-                Out of date: the flow has been changed since.{mayAssess && " Assess it again."}
+                Out of date: the flow, or something that it uses, has been changed since.
+                {mayAssess && " Assess it again."}
               </p>
             )}
             <p className="mt-3">

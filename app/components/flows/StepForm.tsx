@@ -8,7 +8,7 @@ import { MeasuredField } from "#app/components/forms/MeasuredField.tsx";
 import { QuantityField } from "#app/components/forms/QuantityField.tsx";
 import { SubmitButton } from "#app/components/forms/SubmitButton.tsx";
 import { LEAVE, UnsavedGuard } from "#app/components/forms/UnsavedGuard.tsx";
-import { useHydrated } from "#app/components/forms/use-hydrated.ts";
+import { useInBrowser } from "#app/components/ui/use-in-browser.ts";
 import { useRecordForm } from "#app/components/forms/use-record-form.ts";
 import { STEP_KINDS } from "#app/engine/flow/model.ts";
 import { EXPOSURES, HOLDINGS } from "#app/engine/vocabulary.ts";
@@ -92,7 +92,7 @@ export function StepForm({ values, version, choices, lastResult, back, next }: P
         example="100 um"
         hint="Blank: as before"
       />
-      <KindGroup needed={has.groundFace} title="Ground face" className={SHOWN.groundFace}>
+      <KindGroup needed={has.groundFace} className={SHOWN.groundFace}>
         <MeasuredField
           field={fields.groundFaceForce}
           label="Force of the ground or polished face; compression is negative"
@@ -155,12 +155,13 @@ const SHOWN = {
 };
 
 /** Inputs of some kinds of step. For another kind they are switched off, so that nothing unseen is saved. */
-function KindGroup(props: { needed: boolean; title: string; className: string; children: ReactNode }) {
-  const hydrated = useHydrated();
+function KindGroup(props: { needed: boolean; title?: string; className: string; children: ReactNode }) {
+  const { needed, title, className, children } = props;
+  const scripted = useInBrowser();
   return (
-    <fieldset disabled={hydrated && !props.needed} className={`border-t border-ink pt-4 ${props.className}`}>
-      <legend className="float-left mb-2 w-full font-semibold">{props.title}</legend>
-      <div className="clear-both space-y-3">{props.children}</div>
+    <fieldset disabled={scripted && !needed} className={`${title ? "border-t border-ink pt-4" : ""} ${className}`}>
+      {title && <legend className="float-left mb-2 w-full font-semibold">{title}</legend>}
+      <div className="clear-both space-y-3">{children}</div>
     </fieldset>
   );
 }

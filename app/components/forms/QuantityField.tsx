@@ -15,10 +15,10 @@ interface Props {
 
 /** A quantity typed with its unit. What was understood stands below as it is typed; a fault is said in a sentence. */
 export function QuantityField({ field, label, dimension, example, hint, className = "" }: Props) {
-  const initial = field.initialValue ?? "";
-  const [typed, setTyped] = useState(initial);
-  const changed = typed !== initial;
-  const error = changed ? undefined : field.errors?.[0];
+  const [typed, setTyped] = useState(field.initialValue ?? "");
+  // What the server said is about what was sent: it goes with the first key, until the server has said something again.
+  const [answered, setAnswered] = useState<string[]>();
+  const error = field.errors === answered ? undefined : field.errors?.[0];
   const reading = typed.trim() === "" ? null : parseQuantity(typed, dimension);
   const fault = error ?? (reading && !reading.ok ? reading.message : undefined);
   return (
@@ -33,7 +33,10 @@ export function QuantityField({ field, label, dimension, example, hint, classNam
         placeholder={example}
         aria-invalid={fault ? true : undefined}
         aria-describedby={field.errorId}
-        onInput={(event) => setTyped(event.currentTarget.value)}
+        onInput={(event) => {
+          setTyped(event.currentTarget.value);
+          setAnswered(field.errors);
+        }}
       />
       <small id={field.errorId} aria-live="polite">
         {fault ?? (reading?.ok ? reading.understood : hint)}

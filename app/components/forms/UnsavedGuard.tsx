@@ -1,6 +1,5 @@
-import { useEffect } from "react";
+import { useEffect, useRef } from "react";
 import { useBlocker, type Location } from "react-router";
-import { Notice } from "#app/components/ui/Notice.tsx";
 
 /** Put into a link's `state` when the person has said that what is typed may go. */
 export const LEAVE = { leave: true };
@@ -8,29 +7,43 @@ export const LEAVE = { leave: true };
 const saidSo = ({ state }: Location) =>
   typeof state === "object" && state !== null && "leave" in state && state.leave === true;
 
-/** Asks before a form that was changed is left: in the page for our own links, by the browser for everything else. */
+/** Asks before unsaved edits are left behind, within the application and when the window closes. */
 export function UnsavedGuard({ dirty }: { dirty: boolean }) {
+  const dialog = useRef<HTMLDialogElement>(null);
   const blocker = useBlocker(
     ({ currentLocation, nextLocation }) =>
       dirty && currentLocation.pathname !== nextLocation.pathname && !saidSo(nextLocation),
   );
+  const asks = blocker.state === "blocked";
   useEffect(() => {
-    if (!dirty) return;
-    const ask = (event: BeforeUnloadEvent) => event.preventDefault();
-    window.addEventListener("beforeunload", ask);
-    return () => window.removeEventListener("beforeunload", ask);
+    if (!dirty) return undefined;
+    const warn = (event: BeforeUnloadEvent) => event.preventDefault();
+    window.addEventListener("beforeunload", warn);
+    return () => window.removeEventListener("beforeunload", warn);
   }, [dirty]);
-  if (blocker.state !== "blocked") return null;
+  useEffect(() => {
+    if (asks) dialog.current?.showModal();
+    else dialog.current?.close();
+  }, [asks]);
   return (
-    <Notice kind="caution" title="What you changed here is not saved yet">
-      <div className="flex flex-wrap gap-2">
-        <button type="button" className="btn" autoFocus onClick={() => blocker.reset()}>
-          Stay and go on
+    <dialog
+      ref={dialog}
+      className="m-auto max-w-120 border border-ink bg-raised p-6 text-ink backdrop:bg-ink/40"
+      aria-labelledby="unsaved"
+      onCancel={() => blocker.reset?.()}
+    >
+      <h2 id="unsaved" className="text-lead font-semibold">
+        Leave without saving?
+      </h2>
+      <p className="mt-1">What you changed here is not saved yet.</p>
+      <div className="mt-4 flex flex-wrap gap-2">
+        <button type="button" className="btn btn-primary" onClick={() => blocker.reset?.()}>
+          Stay here
         </button>
-        <button type="button" className="btn btn-remove" onClick={() => blocker.proceed()}>
-          Leave without saving
+        <button type="button" className="btn btn-remove" onClick={() => blocker.proceed?.()}>
+          Leave it
         </button>
       </div>
-    </Notice>
+    </dialog>
   );
 }

@@ -21,7 +21,7 @@ export interface FlowPage {
   rows: StepRow[];
   plan: ReturnType<typeof planColumns>;
   /** newest first */
-  assessments: (FlowAssessmentRow & { outOfDate: boolean })[];
+  assessments: FlowAssessmentRow[];
   stamp: RecordStamp;
   mayEdit: boolean;
   mayAssess: boolean;
@@ -30,10 +30,10 @@ export interface FlowPage {
 /** One flow with its rows, its plan to draw and its assessments, newest first. */
 export async function flowPage(scope: ActorScope, flowId: string | undefined): Promise<FlowPage> {
   const id = idFrom(flowId, "flow");
-  const { flow, assessments } = await inScope(scope, async (em) => ({
-    flow: await readFlow(em, scope, id),
-    assessments: await flowAssessments(em, id),
-  }));
+  const { flow, assessments } = await inScope(scope, async (em) => {
+    const found = await readFlow(em, scope, id);
+    return { flow: found, assessments: await flowAssessments(em, found) };
+  });
   const { silicon, incomingThickness, steps } = flow;
   const thicknesses = [incomingThickness, ...steps.flatMap(({ siliconAfter }) => siliconAfter ?? [])];
   return {
@@ -48,7 +48,7 @@ export async function flowPage(scope: ActorScope, flowId: string | undefined): P
     hottest: steps.length === 0 ? null : Math.max(...steps.map(({ peakTemperature }) => peakTemperature)),
     rows: stepRows(steps, incomingThickness),
     plan: planColumns(steps, incomingThickness),
-    assessments: assessments.map((row) => ({ ...row, outOfDate: flow.stamp.updatedAt > row.createdAt })),
+    assessments,
     stamp: flow.stamp,
     mayEdit: flow.mayEdit,
     mayAssess: flow.mayAssess,

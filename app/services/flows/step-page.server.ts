@@ -7,6 +7,7 @@ import { idFrom } from "../uuid.server.ts";
 import { flowInputOf, type FlowDetail, type StepDetail } from "./flow-detail.ts";
 import { getFlow } from "./flows.server.ts";
 import { stepChoices } from "./step-choices.server.ts";
+import { stepNumber } from "./step-number.ts";
 
 /** What stands around a step's form. */
 export interface StepSurroundings {
@@ -76,10 +77,4 @@ export async function newStepPage(
     planned: flow.steps[number - 2]?.planned ?? "bare",
     choices: await stepChoices(scope),
   };
-}
-
-/** The number asked for, kept between 1 and one more than there are steps; the end for anything else. */
-export function stepNumber(asked: string | null, steps: number): number {
-  const number = Number.parseInt(asked ?? "", 10);
-  return Number.isInteger(number) ? Math.min(Math.max(1, number), steps + 1) : steps + 1;
 }

@@ -1,4 +1,4 @@
-import { data, Link, redirect } from "react-router";
+import { data, Link, redirect, type ShouldRevalidateFunctionArgs } from "react-router";
 import { FlowAnswer } from "#app/components/flows/FlowAnswer.tsx";
 import { FlowFigures } from "#app/components/flows/FlowFigures.tsx";
 import { FlowPlan } from "#app/components/flows/FlowPlan.tsx";
@@ -9,6 +9,7 @@ import { PageHead } from "#app/components/layout/PageHead.tsx";
 import { Notice } from "#app/components/ui/Notice.tsx";
 import { flowFigures } from "#app/lib/flow-figures.ts";
 import { scopeOf } from "#app/server/contexts.server.ts";
+import { postedForm } from "#app/server/form.server.ts";
 import { doFlowIntent } from "#app/services/flows/flow-intent.server.ts";
 import { flowPage } from "#app/services/flows/flow-page.server.ts";
 import { idFrom } from "#app/services/uuid.server.ts";
@@ -21,9 +22,14 @@ export async function loader({ context, params }: Route.LoaderArgs) {
 }
 
 export async function action({ request, context, params }: Route.ActionArgs) {
-  const result = await doFlowIntent(scopeOf(context), idFrom(params.flowId, "flow"), await request.formData());
+  const result = await doFlowIntent(scopeOf(context), idFrom(params.flowId, "flow"), await postedForm(request));
   if ("path" in result) throw redirect(result.path);
   return data(result, { status: result.status });
+}
+
+/** After a conflict the steps are to be seen as they are now. */
+export function shouldRevalidate({ actionStatus, defaultShouldRevalidate }: ShouldRevalidateFunctionArgs): boolean {
+  return actionStatus === 409 || defaultShouldRevalidate;
 }
 
 export default function FlowRoute({ loaderData: flow, actionData }: Route.ComponentProps) {
