@@ -10,8 +10,8 @@ import { recordFields } from "./record-fields.ts";
 const SPREAD = "The tolerance is as large as the thickness itself.";
 
 /** A thickness whose tolerance reaches zero says that there may be none of it. */
-const reachesZero = (thickness: Measured | null) =>
-  thickness !== null && thickness.tolerance !== null && thickness.tolerance >= thickness.value;
+const reachesZero = (thickness: Measured | null | undefined) =>
+  typeof thickness?.tolerance === "number" && thickness.tolerance >= thickness.value;
 
 const identifier = z
   .union([z.uuid(), z.literal("")], "Choose one of the list.")
@@ -76,10 +76,13 @@ const stepFields = z.object({
 });
 export type StepValues = z.output<typeof stepFields>;
 
+/** A step some of whose fields may not have been understood. */
+type Partly<Values> = { [Field in keyof Values]?: Values[Field] | undefined };
 type Fail = (path: (string | number)[], message: string) => void;
 
 /** What the kind of step asks for, and what it has no use for: that must not lie in wait unseen. */
-function checkKind(step: StepValues, fail: Fail): void {
+function checkKind(step: Partly<StepValues>, fail: Fail): void {
+  if (!step.kind) return;
   const has = inputsOf(step.kind);
   if (has.bond) {
     if (!step.carrier) fail(["carrier"], "Choose the carrier that it is bonded to.");
@@ -105,23 +108,38 @@ function checkKind(step: StepValues, fail: Fail): void {
     fail(["siliconAfter", "value"], "Type the silicon that remains after the grind.");
 }
 
-function checkFilm({ change, thickness, stress, coverage }: StepValues["films"][number], fail: Fail): void {
+function checkFilm({ change, thickness, stress, coverage }: Partly<StepValues["films"][number]>, fail: Fail): void {
   if (change === "adds") {
-    if (!thickness) fail(["thickness", "value"], "Type the film thickness. Blank is missing, not zero.");
+    if (thickness === null) fail(["thickness", "value"], "Type the film thickness. Blank is missing, not zero.");
     if (reachesZero(thickness)) fail(["thickness", "tolerance"], SPREAD);
-    return;
   }
+  if (change !== "removes") return;
   const whole = "A removal takes the whole film: leave this blank.";
   if (thickness) fail(["thickness", "value"], whole);
   if (stress) fail(["stress", "value"], whole);
-  if (coverage !== null) fail(["coverage"], whole);
+  if (typeof coverage === "number") fail(["coverage"], whole);
 }
 
-/** A step of a flow. Whether the order of steps makes sense is not asked here: the order rule says so in the assessment. */
-export const stepSchema = stepFields.superRefine((step, context) => {
-  const fail: Fail = (path, message) => context.addIssue({ code: "custom", path, message });
+/** Looks at the fields together. A field that has been spoken of already is not spoken of again. */
+function checkStep(step: Partly<StepValues>, context: z.core.$RefinementCtx): void {
+  const spokenOf = context.issues.map(({ path }) => `${path?.join(".")}.`);
+  const fail: Fail = (path, message) => {
+    const field = path.filter((part) => part !== "value" && part !== "tolerance").join(".");
+    if (spokenOf.some((known) => known.startsWith(`${field}.`))) return;
+    context.addIssue({ code: "custom", path, message });
+  };
   checkKind(step, fail);
   for (const field of ["siliconAfter", "trimWidth", "trimDepth", "bondThickness"] as const)
     if (reachesZero(step[field])) fail([field, "tolerance"], SPREAD.replace("thickness", "value"));
-  step.films.forEach((film, index) => checkFilm(film, (path, message) => fail(["films", index, ...path], message)));
+  if (!Array.isArray(step.films)) return;
+  for (const [index, film] of step.films.entries())
+    if (typeof film === "object") checkFilm(film, (path, message) => fail(["films", index, ...path], message));
+}
+
+/**
+ * A step of a flow. Everything that is wrong is said at once, so the step as a whole is looked at even when a field of it was not
+ * understood. Whether the order of steps makes sense is not asked here: the order rule says so in the assessment.
+ */
+export const stepSchema = stepFields.superRefine(checkStep, {
+  when: ({ value }) => typeof value === "object" && value !== null,
 });

@@ -23,8 +23,12 @@ function isIntent(text: FormDataEntryValue): boolean {
   }
 }
 
+/** A field's name as our forms have them: at most one list, of at most a hundred lines. */
+const FIELD = /^\w+(?:\[\d{1,2}\])?(?:\.\w+){0,2}$/;
+
 /**
- * The fields of a posted form. NUL, which the database does not know, is taken out of texts.
+ * The fields of a posted form. NUL, which the database does not know, is taken out of texts; what no form of ours could have
+ * sent is passed over, so that a made-up list of a million lines is not shown back.
  * @throws 400 for a request that is no form
  */
 export async function postedForm(request: Request): Promise<FormData> {
@@ -33,7 +37,7 @@ export async function postedForm(request: Request): Promise<FormData> {
     throw problem(400, "What was sent is not a form. Open the page again and send its form.");
   });
   for (const [name, value] of posted)
-    formData.append(name, typeof value === "string" ? value.replaceAll("\0", "") : value);
+    if (FIELD.test(name)) formData.append(name, typeof value === "string" ? value.replaceAll("\0", "") : value);
   return formData;
 }
 

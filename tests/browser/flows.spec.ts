@@ -162,7 +162,7 @@ test.describe("an engineer", () => {
     await expect(proposed).toContainText("Grind to 110 µm");
     const name = named("Tern T-2, from its stack");
     await page.getByLabel("Name").fill(name);
-    await page.getByRole("button", { name: /^Save with \d+ steps/ }).click();
+    await press(page, "Save with the steps below");
     await expect(page.getByRole("heading", { level: 1 })).toHaveText(name);
     const grind = steps(page).getByRole("row").filter({ hasText: "Grind to 110" });
     await expect(grind).toContainText("110 ± 3");
@@ -240,11 +240,11 @@ test.describe("an engineer", () => {
       await page.goto(`/flows/new?stack=${stack}`);
       const name = named("Petrel P-3, from its stack");
       await page.getByLabel("Name").fill(name);
-      await page.getByRole("button", { name: /^Save with \d+ steps/ }).click();
+      await press(page, "Save with the steps below");
       await expect(page.getByText("This stack is thinned on a carrier: choose it.")).toBeVisible();
       await page.getByLabel("Carrier", { exact: true }).selectOption({ label: "Glass carrier 3.0 ppm" });
       await page.getByLabel("Bonding material").selectOption({ label: "Laser-release adhesive B" });
-      await page.getByRole("button", { name: /^Save with \d+ steps/ }).click();
+      await press(page, "Save with the steps below");
       await expect(page.getByRole("heading", { level: 1 })).toHaveText(name);
       await expect(steps(page)).toContainText("Bond to Glass carrier 3.0 ppm, Laser-release adhesive B");
       await press(page, "Assess");

@@ -25,7 +25,8 @@ interface Props {
 /** The films that a step adds or takes off. Lines are added and removed without a server, and by the server without scripts. */
 export function StepFilms({ form, field, films }: Props) {
   const add = useRef<HTMLButtonElement>(null);
-  const lines = field.getFieldList();
+  // A post that is not from this form may have sent something else under the name of the list.
+  const lines = Array.isArray(field.initialValue) ? field.getFieldList() : [];
   return (
     <section aria-labelledby="films-head" className="border-t border-ink pt-4">
       <h2 id="films-head" className="font-semibold">

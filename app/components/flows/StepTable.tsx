@@ -63,7 +63,7 @@ export function StepTable({ caption, rows, href, current, actions, below }: Step
                 <Row row={row} href={href} current={row.id === current} actions={actions} />
                 {beneath && (
                   <tr>
-                    <td colSpan={columns} className="border-t-0 bg-wash">
+                    <td colSpan={columns} className="border-t-0 bg-wash tablet:pl-17">
                       {beneath}
                     </td>
                   </tr>

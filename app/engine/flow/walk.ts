@@ -81,12 +81,21 @@ export function walkFlow(flow: FlowInput, limits: SiteLimits, options: WalkOptio
         })),
       };
     } catch (error) {
-      if (error instanceof EngineInputError && !error.field.startsWith("steps["))
-        throw new EngineInputError(`${field}.${error.field}`, error.reason, error.allowed);
-      throw error;
+      throw error instanceof EngineInputError ? atStep(error, field) : error;
     }
   });
   return { steps };
+}
+
+/** A refusal with the step that it concerns. A curvature is nobody's input, so that one is said by its causes. */
+function atStep({ field, reason, allowed }: EngineInputError, step: string): EngineInputError {
+  if (field.startsWith("steps[")) return new EngineInputError(field, reason, allowed);
+  if (field === "linearCurvature")
+    return new EngineInputError(
+      step,
+      "the films would bend the wafer beyond anything that can be computed. Check their thickness, stress and modulus, and the silicon left",
+    );
+  return new EngineInputError(`${step}.${field}`, reason, allowed);
 }
 
 /** Rigid-substrate force of each side's films as they are now: what they would pull with if the silicon were thick. */

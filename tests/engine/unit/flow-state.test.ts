@@ -103,6 +103,15 @@ describe("the wafer between steps", () => {
   });
 });
 
+describe("what cannot be computed", () => {
+  it("is refused with the step and with what to look at, in words that somebody typed", () => {
+    const gel = film({ youngsModulus: exact(1e4) });
+    const absurd = addition({ film: gel, thickness: exact(1e-3), stress: exact(1e10) });
+    const walk = () => walkFlow(flow([step(), step({ siliconAfter: exact(um(1)), adds: [absurd] })]), defaultLimits());
+    expect(walk).toThrow(/^steps\[1\]: the films would bend the wafer beyond anything/);
+  });
+});
+
 describe("a wafer that is held flat", () => {
   const copper = film({
     kind: "metal",

@@ -140,6 +140,22 @@ describe("a step's form", () => {
     expect(read.films[0]?.thickness?.source).toBe("assumed");
   });
 
+  it("says everything that is wrong at once", () => {
+    expect(Object.keys(faults({ kind: "bond", peakTemperature: "hot", ...adds({ film: "" }) })).toSorted()).toEqual([
+      "bondThickness.value",
+      "bondingMaterial",
+      "carrier",
+      "films.0.film",
+      "peakTemperature",
+    ]);
+    expect(faults({ kind: "grind", siliconAfter: { value: "12 parsecs" } })).toEqual({
+      "siliconAfter.value": expect.stringContaining("parsecs"),
+    });
+    expect(faults({ films: "x" })).toHaveProperty("films");
+    expect(faults({ films: [undefined, "x"], siliconAfter: "x", trimDepth: [] })).not.toEqual({});
+    expect(stepSchema.safeParse(null).success).toBe(false);
+  });
+
   it("keeps forms from filling the database", () => {
     const films = Array.from({ length: 21 }, () => adds().films[0]);
     expect(faults({ films })["films"]).toContain("at most 20 films");

@@ -41,7 +41,7 @@ export default function NewFlow({ loaderData, actionData }: Route.ComponentProps
         stack={proposal?.stack.id}
         lastResult={actionData?.lastResult}
         back={proposal ? `/stacks/${proposal.stack.id}` : "/flows"}
-        save={proposal ? `Save with ${proposal.rows.length} steps` : "Save and add steps"}
+        save={proposal ? "Save with the steps below" : "Save and add steps"}
       />
       {proposal && (
         <section className="mt-6" aria-labelledby="proposal-head">
