@@ -1,36 +1,12 @@
 import { randomUUID } from "node:crypto";
 import type { Page } from "@playwright/test";
-import { expect, expectNoAxeFindings, signIn, test } from "./support.ts";
-
-const TERN = "Tern T-2, to 100 µm on tape";
-
-/** A list in which the demo flow comes first, however many copies there are. */
-const LIST = `/flows?q=${encodeURIComponent(TERN)}&sort=name`;
+import { ownFlow, press, stackId, steps, TERN } from "./flow-pages.ts";
+import { expect, signIn, test } from "./support.ts";
 
 /** A name that no other test has. */
 const named = (what: string) => `${what}, ${randomUUID().slice(0, 8)}`;
 
-/** Opens the demo flow and makes a copy of it, which is this test's own. */
-async function ownFlow(page: Page): Promise<string> {
-  await page.goto(LIST);
-  await page.getByRole("link", { name: TERN, exact: true }).click();
-  await page.getByRole("button", { name: "Copy", exact: true }).click();
-  await expect(page.getByRole("heading", { level: 1 })).toContainText(`${TERN}, copy`);
-  return new URL(page.url()).pathname;
-}
-
-const steps = (page: Page) => page.getByRole("table", { name: "Steps of the flow" });
 const titles = (page: Page) => steps(page).locator("tbody th[scope=row] > a").allTextContents();
-const press = (page: Page, name: string) => page.getByRole("button", { name, exact: true }).click();
-
-/** Where a stack of the demo is, by a film that it is made of. */
-async function stackPath(page: Page, name: string): Promise<string> {
-  await page.goto("/films");
-  await page.getByRole("link", { name: "Polymer dielectric A", exact: true }).click();
-  const path = await page.getByRole("link", { name }).getAttribute("href");
-  if (!path) throw new Error(`There is no stack called ${name}.`);
-  return path;
-}
 
 test.describe("an engineer", () => {
   test.beforeEach(({ page }) => signIn(page, "engineer"));
@@ -155,7 +131,7 @@ test.describe("an engineer", () => {
   });
 
   test("starts a flow from a stack: thinned on tape, every proposed number assumed", async ({ page }) => {
-    const stack = (await stackPath(page, "Tern T-2, one redistribution layer")).replace("/stacks/", "");
+    const stack = await stackId(page, "Tern T-2, one redistribution layer");
     await page.goto(`/flows/new?stack=${stack}`);
     const proposed = page.getByRole("table", { name: "Steps proposed" });
     await expect(proposed).toContainText("Coat and cure Polymer dielectric A, 5 µm, 95 %");
@@ -236,7 +212,7 @@ test.describe("an engineer", () => {
     });
 
     test("must choose carrier and bonding material for a stack that needs them", async ({ page }) => {
-      const stack = (await stackPath(page, "Petrel P-3, back-side metal")).replace("/stacks/", "");
+      const stack = await stackId(page, "Petrel P-3, back-side metal");
       await page.goto(`/flows/new?stack=${stack}`);
       const name = named("Petrel P-3, from its stack");
       await page.getByLabel("Name").fill(name);
@@ -346,105 +322,3 @@ test.describe("without scripts", () => {
     await expect(page).toHaveURL(/\/assessments\//);
   });
 });
-
-test.describe("roles", () => {
-  test.use({ refusals: true });
-
-  /** Posts as a form of ours would, from the page's own session. */
-  const post = (page: Page, path: string, form: Record<string, string>, origin: string) =>
-    page.request.post(path, { form, headers: { Origin: origin }, maxRedirects: 0 });
-
-  test("a technician reads flows and steps and may change nothing", async ({ page, baseURL }) => {
-    await signIn(page, "technician");
-    await page.goto(LIST);
-    await expect(page.getByRole("link", { name: "New flow" })).toHaveCount(0);
-    await page.getByRole("link", { name: TERN, exact: true }).click();
-    await expect(steps(page)).toContainText("Grind to 110");
-    const path = new URL(page.url()).pathname;
-    for (const name of ["Assess", "Copy", "Name and wafer", "Add a step at the end"])
-      await expect(page.getByText(name, { exact: true })).toHaveCount(0);
-    await expect(page.getByRole("button", { name: /^Move/ })).toHaveCount(0);
-    await page.getByRole("link", { name: "Grind to 110 µm" }).click();
-    await expect(page.getByRole("table", { name: "Figures of the step" })).toContainText("110");
-    await expect(page.getByRole("button", { name: /Save/ })).toHaveCount(0);
-
-    const step = new URL(page.url()).pathname;
-    const origin = baseURL ?? "";
-    expect((await post(page, path, { intent: "assess" }, origin)).status()).toBe(403);
-    expect((await post(page, path, { intent: "copy" }, origin)).status()).toBe(403);
-    expect((await post(page, path, { intent: "remove" }, origin)).status()).toBe(403);
-    expect((await post(page, path, { change: `remove ${step.split("/").at(-1)}` }, origin)).status()).toBe(403);
-    const values = { title: "x", kind: "measure", peakTemperature: "25 °C", planned: "bare" };
-    expect((await post(page, step, values, origin)).status()).toBe(403);
-    expect((await post(page, `${path}/steps/new`, values, origin)).status()).toBe(403);
-    for (const place of [`${path}/edit`, `${path}/steps/new`, "/flows/new"])
-      expect((await page.request.get(place)).status()).toBe(403);
-  });
-
-  test("a guest sees no flow, not even that there is one", async ({ page, browser, baseURL }) => {
-    const engineer = await browser.newPage({ baseURL });
-    await signIn(engineer, "engineer");
-    await engineer.goto(LIST);
-    const path = await engineer.getByRole("link", { name: TERN, exact: true }).getAttribute("href");
-    await engineer.close();
-    await signIn(page, "guest");
-    await expect(page.getByRole("link", { name: "Flows" })).toHaveCount(0);
-    expect((await page.request.get("/flows")).status()).toBe(403);
-    expect((await page.request.get(path ?? "")).status()).toBe(404);
-    expect((await post(page, path ?? "", { intent: "assess" }, baseURL ?? "")).status()).toBe(404);
-    await page.goto(path ?? "");
-    await expect(page.getByRole("main")).toContainText("There is no such flow");
-  });
-
-  test("an id that names nothing is nothing, whatever is in it", async ({ page, baseURL }) => {
-    await signIn(page, "engineer");
-    const nowhere = "/flows/00000000-0000-4000-8000-000000000000";
-    for (const path of [nowhere, "/flows/1", "/flows/'%20or%201=1", `${nowhere}/edit`, `${nowhere}/steps/new`])
-      expect((await page.request.get(path)).status()).toBe(404);
-    const path = await ownFlow(page);
-    expect((await page.request.get(`${path}/steps/1`)).status()).toBe(404);
-    expect((await post(page, path, { intent: "fly" }, baseURL ?? "")).status()).toBe(400);
-    expect((await post(page, path, { change: "up 1" }, baseURL ?? "")).status()).toBe(404);
-    expect((await page.request.get(`${path}/steps/new?at=-7`)).status()).toBe(200);
-  });
-});
-
-for (const colorScheme of ["light", "dark"] as const)
-  test.describe(`axe, ${colorScheme}`, () => {
-    test.use({ colorScheme, refusals: true });
-
-    test("finds nothing on any page of the flows", async ({ page }) => {
-      test.slow();
-      await signIn(page, "engineer");
-      const stack = (await stackPath(page, "Petrel P-3, back-side metal")).replace("/stacks/", "");
-      const path = await ownFlow(page);
-      await expectNoAxeFindings(page);
-      await page.getByRole("link", { name: /^Remove step 2,/ }).click();
-      await expectNoAxeFindings(page);
-      await press(page, "Assess");
-      for (const place of [
-        path,
-        "/flows",
-        "/flows?q=parsecs",
-        "/flows/new",
-        `/flows/new?stack=${stack}`,
-        `${path}/edit`,
-      ]) {
-        await page.goto(place);
-        await expectNoAxeFindings(page);
-      }
-      await page.getByRole("link", { name: "Flows", exact: true }).first().click();
-      await page.goto(path);
-      await page.getByRole("link", { name: "Plate redistribution copper, 5 µm, 35 %", exact: true }).click();
-      await expectNoAxeFindings(page);
-      await page.getByLabel("Kind of step").selectOption("bond");
-      await page.getByLabel("Peak temperature").fill("hot");
-      await press(page, "Save step");
-      await expect(page.getByRole("alert")).toBeVisible();
-      await expectNoAxeFindings(page);
-      await page.setViewportSize({ width: 390, height: 844 });
-      await page.goto(path);
-      await page.getByLabel("Change step 2", { exact: true }).click();
-      await expectNoAxeFindings(page);
-    });
-  });

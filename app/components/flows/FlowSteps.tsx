@@ -22,6 +22,8 @@ export function FlowSteps({ flowId, version, rows, mayEdit, fault }: Props) {
   const busy = useNavigation().state !== "idle";
   const current = rows.find(({ id }) => id === search.get("step"));
   const moved = search.get("moved");
+  const openOrClose = ({ id }: StepRow) =>
+    withParams(search, { step: id === current?.id ? null : id, moved: null, remove: null });
   const add = (
     <Link to={`/flows/${flowId}/steps/new?at=${rows.length + 1}`} className="btn">
       {rows.length === 0 ? "Add the first step" : "Add a step at the end"}
@@ -57,6 +59,7 @@ export function FlowSteps({ flowId, version, rows, mayEdit, fault }: Props) {
         href={(row) => `/flows/${flowId}/steps/${row.id}`}
         current={current?.id}
         actions={mayEdit ? (row) => <StepActions row={row} of={rows.length} form={FORM} /> : undefined}
+        more={mayEdit ? openOrClose : undefined}
         below={(row) =>
           fault?.step === row.number ? (
             <p className="font-semibold text-stop">Cannot be computed: {fault.reason}</p>

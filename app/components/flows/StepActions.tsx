@@ -37,7 +37,7 @@ export function StepActions({ row, of, form }: Props) {
     </button>
   );
   return (
-    <div className="-mt-1.5 flex justify-end max-tablet:mt-0 max-tablet:-mr-12 max-tablet:-ml-3 max-tablet:justify-start">
+    <div className="-mt-1.5 flex justify-end max-tablet:mt-0 max-tablet:-ml-3 max-tablet:justify-start">
       {move("up", row.number > 1)}
       {move("down", row.number < of)}
       <button

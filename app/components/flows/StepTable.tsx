@@ -13,12 +13,14 @@ export interface StepTableProps {
   current?: string | null;
   /** what can be done to a row */
   actions?: (row: StepRow) => ReactNode;
+  /** on a phone: where it leads to open a row to its actions, or to close it again */
+  more?: (row: StepRow) => string;
   /** what is said or asked beneath a row */
   below?: (row: StepRow) => ReactNode;
 }
 
 /** The steps of a flow, one a row; on a phone a row becomes a block. */
-export function StepTable({ caption, rows, href, current, actions, below }: StepTableProps) {
+export function StepTable({ caption, rows, href, current, actions, more, below }: StepTableProps) {
   const columns = actions ? 9 : 8;
   return (
     <div className="overflow-x-auto" tabIndex={0} role="region" aria-label={caption}>
@@ -60,7 +62,14 @@ export function StepTable({ caption, rows, href, current, actions, below }: Step
             const beneath = below?.(row);
             return (
               <Fragment key={row.id}>
-                <Row row={row} href={href} current={row.id === current} actions={actions} />
+                <Row row={row} href={href} current={row.id === current} actions={actions} more={more?.(row)} />
+                {actions && row.id === current && (
+                  <tr className="tablet:hidden">
+                    <td colSpan={columns} className="border-t-0 bg-wash pl-10">
+                      {actions(row)}
+                    </td>
+                  </tr>
+                )}
                 {beneath && (
                   <tr>
                     <td colSpan={columns} className="border-t-0 bg-wash tablet:pl-17">
@@ -82,7 +91,8 @@ function Row({
   href,
   current,
   actions,
-}: Pick<StepTableProps, "href" | "actions"> & { row: StepRow; current: boolean }) {
+  more,
+}: Pick<StepTableProps, "href" | "actions"> & { row: StepRow; current: boolean; more: string | undefined }) {
   const { number, title, kind, changes, peak, minutes, silicon, tool, exposures, planned, bond } = row;
   const assumedWords = row.assumed && <span className="font-semibold text-caution"> assumed numbers</span>;
   const toolWords = tool ?? <span className="font-semibold text-caution">No tool chosen</span>;
@@ -111,16 +121,16 @@ function Row({
             {assumedWords}
           </p>
           <Changes changes={changes} />
-          {actions && (
-            <details open={current}>
-              <summary
-                className="absolute top-0 right-0 flex size-11 cursor-pointer list-none items-center justify-center"
-                aria-label={`Change step ${number}`}
-              >
-                <StepIcon kind="more" />
-              </summary>
-              {actions(row)}
-            </details>
+          {more && (
+            <Link
+              to={more}
+              preventScrollReset
+              className="absolute top-0 right-0 flex size-11 items-center justify-center text-ink"
+              aria-label={`Change step ${number}`}
+              aria-expanded={current}
+            >
+              <StepIcon kind="more" />
+            </Link>
           )}
         </div>
       </th>
