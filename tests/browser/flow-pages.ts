@@ -22,6 +22,12 @@ export const steps = (page: Page) => page.getByRole("table", { name: "Steps of t
 /** Presses the button of that name. */
 export const press = (page: Page, name: string) => page.getByRole("button", { name, exact: true }).click();
 
+/** Assesses the flow of the page and waits until the assessment is there. */
+export async function assess(page: Page): Promise<void> {
+  await press(page, "Assess");
+  await expect(page).toHaveURL(/\/assessments\//);
+}
+
 /** Id of a stack of the demo, found by a film that it is made of. */
 export async function stackId(page: Page, name: string): Promise<string> {
   await page.goto("/films");

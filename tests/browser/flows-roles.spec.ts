@@ -1,5 +1,5 @@
 import type { Page } from "@playwright/test";
-import { LIST, ownFlow, press, stackId, steps, TERN } from "./flow-pages.ts";
+import { assess, LIST, ownFlow, press, stackId, steps, TERN } from "./flow-pages.ts";
 import { expect, expectNoAxeFindings, signIn, test } from "./support.ts";
 
 test.describe("roles", () => {
@@ -76,7 +76,7 @@ for (const colorScheme of ["light", "dark"] as const)
       await expectNoAxeFindings(page);
       await page.getByRole("link", { name: /^Remove step 2,/ }).click();
       await expectNoAxeFindings(page);
-      await press(page, "Assess");
+      await assess(page);
       for (const place of [
         path,
         "/flows",

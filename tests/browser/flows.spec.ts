@@ -1,6 +1,6 @@
 import { randomUUID } from "node:crypto";
 import type { Page } from "@playwright/test";
-import { ownFlow, press, stackId, steps, TERN } from "./flow-pages.ts";
+import { assess, ownFlow, press, stackId, steps, TERN } from "./flow-pages.ts";
 import { expect, signIn, test } from "./support.ts";
 
 /** A name that no other test has. */
@@ -30,8 +30,7 @@ test.describe("an engineer", () => {
   test("assesses a flow, changes a step until it fails, and is told that the answer is old", async ({ page }) => {
     const path = await ownFlow(page);
     await expect(page.getByRole("heading", { name: "Not assessed yet" })).toBeVisible();
-    await press(page, "Assess");
-    await expect(page).toHaveURL(/\/assessments\//);
+    await assess(page);
     await page.goto(path);
     const answer = page.getByRole("region", { name: "Newest assessment" });
     await expect(answer).toContainText("Clear");
@@ -42,7 +41,7 @@ test.describe("an engineer", () => {
     await press(page, "Save step");
     await expect(page).toHaveURL(new RegExp(`${path}\\?step=`));
     await expect(answer).toContainText("Out of date");
-    await press(page, "Assess");
+    await assess(page);
     await page.goto(path);
     await expect(answer).toContainText("Do not run");
     await expect(page.getByRole("region", { name: "Earlier assessments" })).toContainText("Assessment 1");
@@ -143,8 +142,7 @@ test.describe("an engineer", () => {
     const grind = steps(page).getByRole("row").filter({ hasText: "Grind to 110" });
     await expect(grind).toContainText("110 ± 3");
     await expect(grind).toContainText("assumed numbers");
-    await press(page, "Assess");
-    await expect(page).toHaveURL(/\/assessments\//);
+    await assess(page);
   });
 
   test("removes a flow that was never assessed, asked twice", async ({ page }) => {
@@ -206,7 +204,7 @@ test.describe("an engineer", () => {
       await page.getByLabel("Kind of step").selectOption("debond");
       await page.getByLabel("Tool").selectOption({ label: "Debonder (1000 µm up, 1000 µm down)" });
       await press(page, "Save step");
-      await press(page, "Assess");
+      await assess(page);
       await page.goto(path);
       await expect(page.getByRole("region", { name: "Newest assessment" })).toContainText("nothing to debond");
     });
@@ -223,8 +221,7 @@ test.describe("an engineer", () => {
       await press(page, "Save with the steps below");
       await expect(page.getByRole("heading", { level: 1 })).toHaveText(name);
       await expect(steps(page)).toContainText("Bond to Glass carrier 3.0 ppm, Laser-release adhesive B");
-      await press(page, "Assess");
-      await expect(page).toHaveURL(/\/assessments\//);
+      await assess(page);
     });
 
     test("is told why a flow without steps cannot be assessed", async ({ page }) => {
@@ -318,7 +315,6 @@ test.describe("without scripts", () => {
     await press(page, "Save step");
     await expect(page).toHaveURL(new RegExp(`${path}\\?step=`));
     await expect(steps(page)).toContainText("trims edge, 0.7 mm wide, 150 µm deep");
-    await press(page, "Assess");
-    await expect(page).toHaveURL(/\/assessments\//);
+    await assess(page);
   });
 });
