@@ -15,7 +15,7 @@ interface Props {
 
 /** A quantity typed with its unit. What was understood stands below as it is typed; a fault is said in a sentence. */
 export function QuantityField({ field, label, dimension, example, hint, className = "" }: Props) {
-  const [typed, setTyped] = useState(field.initialValue ?? "");
+  const [typed, setTyped] = useState(textOf(field.initialValue));
   // What the server said is about what was sent: it goes with the first key, until the server has said something again.
   const [answered, setAnswered] = useState<string[]>();
   const error = field.errors === answered ? undefined : field.errors?.[0];
@@ -44,3 +44,6 @@ export function QuantityField({ field, label, dimension, example, hint, classNam
     </div>
   );
 }
+
+/** The text of a field; a post that is not from one of our forms may have sent something else under its name. */
+const textOf = (value: unknown) => (typeof value === "string" ? value : "");

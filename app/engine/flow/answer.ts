@@ -1,15 +1,6 @@
 import type { AssessedStep, FlowAssessment } from "./assess.ts";
 import type { FlowInput } from "./model.ts";
-import { supportRank, type Outcome, type SupportClass } from "../vocabulary.ts";
-
-/** The words of an outcome as they stand alone, sentence case. */
-export const OUTCOME_WORDS: Record<Outcome, string> = {
-  clear: "Clear",
-  caution: "Caution",
-  "needs support": "Needs support",
-  "cannot judge": "Cannot judge",
-  "do not run": "Do not run",
-};
+import { supportRank, type SupportClass } from "../vocabulary.ts";
 
 /** Steps in a row that need the same support, by number. */
 export interface SupportSpan {
