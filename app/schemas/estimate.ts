@@ -16,6 +16,8 @@ function si(unit: UnitSymbol, range: PhysicalRange) {
             : `has to be a number in ${unit}`,
     })
     .refine((value) => value >= range.least && value <= range.most, {
+      // What is wrong by itself is not set against its neighbours as well.
+      abort: true,
       error: ({ input }) => `${String(input)} ${unit} is outside ${range.words}`.replace(" 1 is", " is"),
     });
 }

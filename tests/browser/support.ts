@@ -1,0 +1,71 @@
+import { readFileSync } from "node:fs";
+import AxeBuilder from "@axe-core/playwright";
+import { test as base, expect, type Page } from "@playwright/test";
+
+export { expect };
+
+export interface Account {
+  role: string;
+  email: string;
+  password: string;
+}
+
+/** The demo accounts of the database that the browser tests run against. */
+export function accounts(): Account[] {
+  const file = process.env["DEMO_ACCOUNTS_FILE"];
+  if (!file) throw new Error("DEMO_ACCOUNTS_FILE is not set: run the browser tests through npm test.");
+  return JSON.parse(readFileSync(file, "utf8")) as Account[];
+}
+
+export type Role = "engineer" | "technician" | "shift lead" | "process owner" | "administrator" | "guest";
+
+/** The first demo account of a role. */
+export function accountOf(role: Role): Account {
+  const account = accounts().find((candidate) => candidate.role === role);
+  if (!account) throw new Error(`There is no demo account for ${role}.`);
+  return account;
+}
+
+/** Signs in through the form and waits until Today is there. */
+export async function signIn(page: Page, role: Role): Promise<void> {
+  const { email, password } = accountOf(role);
+  await page.goto("/sign-in");
+  await page.getByLabel("E-mail").fill(email);
+  await page.getByLabel("Password").fill(password);
+  await page.getByRole("button", { name: "Sign in" }).click();
+  await expect(page.getByRole("navigation", { name: "Places" })).toBeVisible();
+}
+
+/** axe's findings on the page as it stands, none of which are expected. */
+export async function expectNoAxeFindings(page: Page): Promise<void> {
+  const { violations } = await new AxeBuilder({ page })
+    .withTags(["wcag2a", "wcag2aa", "wcag21aa", "wcag22aa"])
+    .analyze();
+  const found = violations.map(({ id, nodes }) => `${id}: ${nodes.map(({ target }) => target.join(" ")).join(", ")}`);
+  expect(found).toEqual([]);
+}
+
+/** The browser's own remark about an answer that is a refusal on purpose. */
+const REFUSED = /^Failed to load resource: the server responded with a status of (4\d\d)/;
+
+/**
+ * Playwright's test with an eye on the page: a script that fails or complains fails the test. `refusals: true` lets the browser
+ * remark on answers of 400 to 499, for tests that ask for them.
+ */
+export const test = base.extend<{ refusals: boolean; watched: void }>({
+  refusals: [false, { option: true }],
+  watched: [
+    async ({ page, refusals }, use) => {
+      const complaints: string[] = [];
+      page.on("pageerror", (error) => complaints.push(error.message));
+      page.on("console", (message) => {
+        if (message.type() !== "error" && message.type() !== "warning") return;
+        if (refusals && REFUSED.test(message.text())) return;
+        complaints.push(message.text());
+      });
+      await use();
+      expect(complaints).toEqual([]);
+    },
+    { auto: true },
+  ],
+});
