@@ -25,7 +25,10 @@ export function readListParams(
   const known = sorts.includes(name);
   const page = Number.parseInt(search.get("page") ?? "", 10);
   return {
-    query: (search.get("q") ?? "").trim().slice(0, 100),
+    query: (search.get("q") ?? "")
+      .replace(/\p{Cc}/gu, "")
+      .trim()
+      .slice(0, 100),
     sort: known ? name : (sorts[0] ?? ""),
     descending: known ? asked.startsWith("-") : descending,
     page: Number.isInteger(page) && page > 0 ? Math.min(page, 100_000) : 1,

@@ -2,11 +2,23 @@ import type { Submission } from "@conform-to/react";
 import { parseWithZod } from "@conform-to/zod/v4";
 import type { z } from "zod";
 import type { Saved } from "#app/services/record.server.ts";
+import { problem } from "./problem.server.ts";
 
-/** A posted form as its schema understands it. */
+/**
+ * A posted form as its schema understands it.
+ * @throws 400 for what none of our forms sends: another media type, a broken list button, a character that cannot be kept
+ */
 export async function readForm<Schema extends z.ZodType>(request: Request, schema: Schema) {
-  const formData = await request.formData();
-  return { formData, submission: parseWithZod(formData, { schema }) };
+  const unreadable = () => problem(400, "This form could not be read. Open the page again and send it once more.");
+  const formData = await request.formData().catch(() => {
+    throw unreadable();
+  });
+  if ([...formData.values()].some((value) => typeof value === "string" && value.includes("\0"))) throw unreadable();
+  try {
+    return { formData, submission: parseWithZod(formData, { schema }) };
+  } catch {
+    throw unreadable();
+  }
 }
 
 /** The hidden version of a record's form; null for a new record. */

@@ -27,13 +27,17 @@ export function StackHeadFields({ fields, programs, silicon, draft }: Props) {
   const thickness = fields.siliconThickness.getFieldset();
   const bought = draft.silicon ? `As bought ${thicknessWords(draft.silicon.thickness)}` : undefined;
   return (
-    <div className="grid gap-x-4 gap-y-2 border-b border-ink p-4 tablet:grid-cols-6 tablet:px-5">
-      <LineField field={fields.name} label="Name" className={programs ? "tablet:col-span-4" : "tablet:col-span-6"} />
+    <div className="grid grid-cols-2 gap-x-4 gap-y-2 border-b border-ink p-4 tablet:grid-cols-6 tablet:px-5">
+      <LineField
+        field={fields.name}
+        label="Name"
+        className={programs ? "col-span-2 tablet:col-span-4" : "col-span-2 tablet:col-span-6"}
+      />
       {programs && (
         <ChoiceField
           field={fields.program}
           label="Program"
-          className="tablet:col-span-2"
+          className="col-span-2"
           choices={programs.map(({ id, name }) => ({ value: id, label: name }))}
           blank="Choose"
         />
@@ -41,7 +45,7 @@ export function StackHeadFields({ fields, programs, silicon, draft }: Props) {
       <ChoiceField
         field={fields.silicon}
         label="Silicon"
-        className="tablet:col-span-3"
+        className="col-span-2 tablet:col-span-3"
         choices={silicon.map(({ id, name }) => ({ value: id, label: name }))}
         blank="Choose"
       />
@@ -62,7 +66,7 @@ export function StackHeadFields({ fields, programs, silicon, draft }: Props) {
         example="3 µm"
       />
       {draft.remarks.map((remark) => (
-        <div key={remark} className="tablet:col-span-6">
+        <div key={remark} className="col-span-full">
           <Remark>{remark}</Remark>
         </div>
       ))}

@@ -55,25 +55,22 @@ export function stackColumns(exaggeration: number, flatWithin: number): Column<S
       head: "Free at 25 °C",
       unit: `×${exaggeration}`,
       wide: true,
-      cell: ({ answer, diameter }) =>
-        answer && (
-          <BowLine
-            label=""
-            diameter={diameter}
-            shape={bowOf(answer.shape)}
-            deviceSideUp
-            holding="bare"
-            exaggeration={exaggeration}
-            width={answer.shape.regime === "curled" ? 106 : 84}
-            height={36}
-            showScale={answer.shape.regime === "curled" && exaggeration !== 1}
-          />
-        ),
+      cell: (row) => <RowBow row={row} exaggeration={exaggeration} width={84} height={36} />,
     },
     {
       key: "shape",
       head: "Shape",
-      cell: ({ answer }) => (answer ? shapeWords(answer.shape, flatWithin) : "cannot be estimated"),
+      cell: (row) =>
+        row.answer ? (
+          <>
+            <span className="tablet:hidden print:hidden">
+              <RowBow row={row} exaggeration={exaggeration} width={72} height={26} alwaysScaled />
+            </span>
+            {shapeWords(row.answer.shape, flatWithin)}
+          </>
+        ) : (
+          "cannot be estimated"
+        ),
     },
     {
       key: "support",
@@ -98,4 +95,32 @@ export function stackColumns(exaggeration: number, flatWithin: number): Column<S
       ),
     },
   ];
+}
+
+interface RowBowProps {
+  row: StackListRow;
+  exaggeration: number;
+  width: number;
+  height: number;
+  /** for where the head of the column does not say the scale */
+  alwaysScaled?: boolean;
+}
+
+/** A row's bow line; the words stand beside it. */
+function RowBow({ row: { answer, diameter }, exaggeration, width, height, alwaysScaled = false }: RowBowProps) {
+  if (!answer) return null;
+  const showScale = alwaysScaled || (answer.shape.regime === "curled" && exaggeration !== 1);
+  return (
+    <BowLine
+      label=""
+      diameter={diameter}
+      shape={bowOf(answer.shape)}
+      deviceSideUp
+      holding="bare"
+      exaggeration={exaggeration}
+      width={showScale ? width + 22 : width}
+      height={height}
+      showScale={showScale}
+    />
+  );
 }

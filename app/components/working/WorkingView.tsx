@@ -23,14 +23,14 @@ export function WorkingView({ working, level = 3 }: WorkingViewProps) {
   return (
     <section>
       <Heading className="font-semibold">{equation.title}</Heading>
-      <div className="mt-1 overflow-x-auto py-1" tabIndex={0} role="region" aria-label={`Formula: ${equation.title}`}>
+      <div className="mt-1 overflow-x-auto py-1" tabIndex={0} role="group" aria-label={`Formula: ${equation.title}`}>
         {equation.formula.split(", ").map((part) => (
           <p key={part} className="whitespace-nowrap text-lead">
             <Formula text={part} />
           </p>
         ))}
       </div>
-      <div className="overflow-x-auto" tabIndex={0} role="region" aria-label={`Figures: ${equation.title}`}>
+      <div className="overflow-x-auto" tabIndex={0} role="group" aria-label={`Figures: ${equation.title}`}>
         <table className="table">
           <caption className="sr-only">{equation.title}</caption>
           <thead>
@@ -50,7 +50,9 @@ export function WorkingView({ working, level = 3 }: WorkingViewProps) {
           </tbody>
         </table>
       </div>
-      <p className="mt-2 text-label text-quiet">{[note, equation.range, equation.caution].filter(Boolean).join(" ")}</p>
+      <p className="mt-2 text-label text-quiet">
+        <Formula text={[note, equation.range, equation.caution].filter(Boolean).join(" ")} />
+      </p>
       <p className="mt-1 text-label text-quiet">
         Sources: {equation.sources.map((source) => shortCitation(source)).join("; ")}.
       </p>
@@ -89,5 +91,5 @@ function shortCitation(id: SourceId): string {
   const { author, title, year, basis } = SOURCES[id];
   if (basis === "own derivation" || basis === "own computation")
     return `${basis}, ${title.charAt(0).toLowerCase()}${title.slice(1)}`;
-  return year === null ? author : `${author} ${year}`;
+  return year === null ? `${author}, ${title}` : `${author} ${year}`;
 }
