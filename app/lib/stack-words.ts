@@ -1,5 +1,6 @@
 import { thicknessLimits } from "#app/engine/rules/required-support.ts";
 import type { SiteLimits } from "#app/engine/rules/limits.ts";
+import { formatNumber } from "#app/engine/units/format-number.ts";
 import { formatQuantity } from "#app/engine/units/format.ts";
 import type { Outcome, SupportClass } from "#app/engine/vocabulary.ts";
 import type { EstimateAnswer, EstimateRequest } from "#app/schemas/estimate.ts";
@@ -42,8 +43,14 @@ export function shapeWords({ regime, bow_m, warp_m, roll_radius_m }: Shape, flat
   return `${bow_m < 0 ? "edges up" : "edges down"} ${lengthWords(warp_m)}`;
 }
 
+/** Level of an answer: that of its support class; what is clear by that is a caution when something calls for care. */
+export function answerOutcome(estimated: Estimated, limits: SiteLimits): Outcome {
+  const outcome = supportOutcome(estimated.answer.support.class);
+  return outcome === "clear" && cautions(estimated, limits).length > 0 ? "caution" : outcome;
+}
+
 /** Level of a support class: what is not bare needs support, and a gripper only with caution. */
-export function supportOutcome(support: SupportClass | null): Outcome {
+function supportOutcome(support: SupportClass | null): Outcome {
   switch (support) {
     case null:
       return "cannot judge";
@@ -63,10 +70,24 @@ export function supportOutcome(support: SupportClass | null): Outcome {
 export function becauseSentence({ request, answer }: Estimated): string {
   const { thickness_m, thickness_tolerance_m } = request.wafer;
   const because = answer.support.because;
-  if (thickness_tolerance_m === undefined)
-    return `Judged at nominal ${thicknessWords(thickness_m)}, no tolerance is given: ${because}.`;
+  if (thickness_tolerance_m === undefined) return `Judged at nominal ${thicknessWords(thickness_m)}: ${because}.`;
   return `Judged at ${thicknessWords(thickness_m - thickness_tolerance_m)}, nominal minus tolerance: ${because}.`;
 }
+
+/** What calls for care although the wafer may be lifted so, one sentence each. */
+export function cautions({ request, answer }: Estimated, limits: SiteLimits): string[] {
+  const { regime, stability_ratio } = answer.shape;
+  const from = limits.curlMargin.value;
+  const found: string[] = [];
+  if (request.wafer.thickness_tolerance_m === undefined)
+    found.push("The silicon has no tolerance, so it is judged at nominal");
+  if (regime !== "curled" && stability_ratio >= from)
+    found.push(`At ${ratioWords(stability_ratio)} of the curling load; care is due from ${ratioWords(from)} on`);
+  return found;
+}
+
+/** A ratio of loads, two digits. */
+export const ratioWords = (ratio: number) => formatNumber(ratio, { significant: 2 });
 
 /** Least silicon that may be lifted bare, m: the site's limit, or where it curls if that is thicker. Null without a limit. */
 export function bareFrom({ request, answer }: Estimated, limits: SiteLimits): number | null {
@@ -119,6 +140,19 @@ export function differencePercent(value: number, reference: number): number | nu
   if (Math.abs(reference) < NONE) return null;
   return ((value - reference) / Math.abs(reference)) * 100;
 }
+
+/** How a small-bow formula compares with the free wafer: '24 % less than the edge lift'. */
+export function againstFreeWafer(bow: number, shape: Shape): string {
+  const what = shape.regime === "curled" ? "the edge lift" : "the free wafer";
+  if (bow * shape.bow_m < 0) return `the other way than ${what}`;
+  const percent = differencePercent(Math.abs(bow), Math.abs(shape.bow_m));
+  if (percent === null || Math.abs(percent) < 0.05) return `as ${what}`;
+  return `${percentWords(Math.abs(percent))} ${percent > 0 ? "more" : "less"} than ${what}`;
+}
+
+/** A percentage: one decimal below ten. */
+export const percentWords = (percent: number) =>
+  `${formatNumber(percent, { decimals: Math.abs(percent) < 10 ? 1 : 0 })}\u00A0%`;
 
 /** What differs between this stack and another one, in one or two sentences. */
 export function comparisonSentences(own: Estimated, other: Estimated & { name: string }, limits: SiteLimits): string[] {

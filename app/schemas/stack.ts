@@ -23,4 +23,3 @@ export const stackSchema = z.object({
   layers: z.array(layer).max(60, "A stack holds at most 60 films."),
 });
 export type StackValues = z.output<typeof stackSchema>;
-export type StackFormValues = z.input<typeof stackSchema>;

@@ -1,5 +1,6 @@
 import { randomUUID } from "node:crypto";
 import { raw, type EntityManager, type QueryOrderMap } from "@mikro-orm/postgresql";
+import type { StackListRow } from "#app/components/stacks/stack-columns.tsx";
 import { Film } from "#app/db/entities/film.ts";
 import { Silicon } from "#app/db/entities/silicon.ts";
 import { StackLayer } from "#app/db/entities/stack-layer.ts";
@@ -9,7 +10,7 @@ import type { Side } from "#app/engine/vocabulary.ts";
 import { PAGE_SIZE, type ListPage, type ListParams } from "#app/lib/list-params.ts";
 import { turnFront } from "#app/lib/stack-order.ts";
 import { mayInProgram, programsWhere, type ProgramPermission } from "#app/policies/permissions.ts";
-import type { EstimateAnswer, EstimateRequest } from "#app/schemas/estimate.ts";
+import type { EstimateRequest } from "#app/schemas/estimate.ts";
 import type { StackValues } from "#app/schemas/stack.ts";
 import { notFound, problem } from "#app/server/problem.server.ts";
 import { inScope, type ActorScope } from "#app/server/scope.server.ts";
@@ -22,19 +23,6 @@ import { conflictOf, newRecord, saving, stampOf, touch, type RecordStamp, type S
 import { idFrom } from "./uuid.server.ts";
 
 export const STACK_SORTS = ["updated", "name", "program", "thickness"] as const;
-
-export interface StackRow {
-  id: string;
-  name: string;
-  program: string;
-  diameter: number;
-  thickness: number;
-  films: number;
-  updatedAt: string;
-  updatedBy: string;
-  /** the free wafer at 25 °C; null when it cannot be estimated */
-  answer: EstimateAnswer | null;
-}
 
 export interface StackLayerDetail {
   side: Side;
@@ -148,7 +136,7 @@ const ORDERS: Record<(typeof STACK_SORTS)[number], (direction: "asc" | "desc") =
 export async function listStacks(
   scope: ActorScope,
   params: ListParams,
-): Promise<ListPage<StackRow> & { flatWithin: number }> {
+): Promise<ListPage<StackListRow> & { flatWithin: number }> {
   requireSomewhere(scope, "see the work");
   return inScope(scope, async (em) => {
     const order = ORDERS[STACK_SORTS.find((name) => name === params.sort) ?? "updated"];
@@ -170,7 +158,7 @@ export async function listStacks(
       stacks.map(({ id }) => id),
     );
     const limits = await readLimits(em);
-    const rows = stacks.map((stack): StackRow => {
+    const rows = stacks.map((stack): StackListRow => {
       const detail = detailOf(stack, layers.get(stack.id) ?? [], scope);
       return {
         id: stack.id,

@@ -369,7 +369,7 @@ test.describe("without scripts", () => {
     await addFilm(page, "Plated copper A", "5 um");
     await addFilm(page, "Polymer dielectric A", "12 parsecs");
     await page.getByRole("button", { name: "Work it out without saving" }).click();
-    await expect(answerOf(page)).toContainText("waiting for thickness of Polymer dielectric A");
+    await expect(answerOf(page)).toContainText("Waiting for thickness of Polymer dielectric A");
     await field(page, "layers[0].thickness.value").fill("7 um");
     await field(page, "at").fill("200 C");
     await page.getByRole("button", { name: "Work it out without saving" }).click();

@@ -1,5 +1,10 @@
-import { formatNumber } from "#app/engine/units/format-number.ts";
-import { differencePercent, lengthWords, type Estimated } from "#app/lib/stack-words.ts";
+import {
+  againstFreeWafer,
+  differencePercent,
+  lengthWords,
+  percentWords,
+  type Estimated,
+} from "#app/lib/stack-words.ts";
 import { Remark } from "./Remark.tsx";
 
 /** Share from which the thin-film formula counts as off, in percent of the laminate's bow. */
@@ -43,7 +48,7 @@ export function BowModels({ estimated: { answer } }: { estimated: Estimated }) {
                   {name}
                 </th>
                 <td className="num">{lengthWords(bow, true)}</td>
-                <td className="num">{againstWords(bow, shape.bow_m)}</td>
+                <td className="text-right">{againstFreeWafer(bow, shape)}</td>
               </tr>
             ))}
             <tr className="font-semibold">
@@ -53,7 +58,7 @@ export function BowModels({ estimated: { answer } }: { estimated: Estimated }) {
               <td className="text-right">
                 {curled ? `curled, edge lift ${lengthWords(shape.warp_m)}` : lengthWords(shape.bow_m, true)}
               </td>
-              <td className="num" />
+              <td />
             </tr>
           </tbody>
         </table>
@@ -65,20 +70,8 @@ export function BowModels({ estimated: { answer } }: { estimated: Estimated }) {
         </p>
       )}
       {off !== null && Math.abs(off) > OFF && (
-        <Remark>{`Stoney’s formula gives ${offWords(off)} than the laminate: the films are no thin films here`}</Remark>
+        <Remark>{`Stoney’s formula gives ${percentWords(Math.abs(off))} ${off > 0 ? "more" : "less"} than the laminate: the films are no thin films here`}</Remark>
       )}
     </section>
   );
 }
-
-/** How far a model's bow is from the free wafer's, in percent of that. */
-function againstWords(bow: number, reference: number): string {
-  if (bow * reference < 0) return "the other way";
-  const percent = differencePercent(Math.abs(bow), Math.abs(reference));
-  return percent === null ? "–" : percentWords(percent, true);
-}
-
-const offWords = (percent: number) => `${percentWords(Math.abs(percent), false)} ${percent > 0 ? "more" : "less"}`;
-
-const percentWords = (percent: number, sign: boolean) =>
-  `${formatNumber(percent, { decimals: Math.abs(percent) < 10 ? 1 : 0, sign })}\u00A0%`;

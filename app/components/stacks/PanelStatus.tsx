@@ -7,18 +7,30 @@ export type Status =
   | { kind: "waiting"; what: string; more: number; fieldId: string; goTo: () => void }
   | { kind: "problem"; sentence: string; retry: () => void };
 
+interface Props {
+  status: Status;
+  /** whether there are no figures yet, so that none can be out of date */
+  before?: boolean;
+}
+
 /** One line beside the answer; empty while the figures are of what is typed. */
-export function PanelStatus({ status }: { status: Status }) {
+export function PanelStatus({ status, before = false }: Props) {
   return (
     <p className="text-label" role="status">
       {status.kind === "asking" && (
         <span className="text-quiet" aria-hidden>
-          Out of date, working it out
+          {before ? "Working it out" : "Out of date, working it out"}
         </span>
       )}
       {status.kind === "waiting" && (
         <>
-          <b>Out of date</b>, waiting for{" "}
+          {before ? (
+            "Waiting for "
+          ) : (
+            <>
+              <b>Out of date</b>, waiting for{" "}
+            </>
+          )}
           <a
             href={`#${status.fieldId}`}
             className="link"
@@ -34,7 +46,8 @@ export function PanelStatus({ status }: { status: Status }) {
       )}
       {status.kind === "problem" && (
         <>
-          <b>Out of date.</b> {status.sentence}{" "}
+          {!before && <b>Out of date. </b>}
+          {status.sentence}{" "}
           <button type="button" className="link cursor-pointer" onClick={status.retry}>
             Try again
           </button>

@@ -1,21 +1,25 @@
 import { FindingTag } from "#app/components/drawings/FindingTag.tsx";
 import { noBreak } from "#app/components/drawings/no-break.ts";
+import { ROOM_TEMPERATURE } from "#app/engine/laminate/layer.ts";
 import type { SiteLimits } from "#app/engine/rules/limits.ts";
 import { formatQuantity } from "#app/engine/units/format.ts";
-import { formatNumber } from "#app/engine/units/format-number.ts";
 import type { StackPanel } from "#app/lib/stack-panel.ts";
 import {
+  againstFreeWafer,
+  answerOutcome,
   answerSentences,
   becauseSentence,
+  cautions,
   lengthWords,
   limitWords,
   radiusWords,
-  supportOutcome,
+  ratioWords,
   temperatureWords,
   thicknessWords,
   type Estimated,
 } from "#app/lib/stack-words.ts";
 import { PanelStatus, type Status } from "./PanelStatus.tsx";
+import { Remark } from "./Remark.tsx";
 
 interface Props {
   panel: StackPanel | null;
@@ -28,7 +32,7 @@ export function StackAnswer({ panel, limits, status }: Props) {
   if (!panel)
     return (
       <section aria-label="Answer" className="p-4 tablet:p-6">
-        <PanelStatus status={status} />
+        <PanelStatus status={status} before />
         <p className="mt-2 text-figure font-medium">
           The answer appears here as soon as silicon and films say enough to work it out.
         </p>
@@ -42,7 +46,7 @@ export function StackAnswer({ panel, limits, status }: Props) {
     <section aria-label="Answer">
       <div className="p-4 tablet:px-6 tablet:pt-5 tablet:pb-4">
         <div className="flex flex-wrap items-baseline gap-x-4">
-          <FindingTag outcome={supportOutcome(support)}>
+          <FindingTag outcome={answerOutcome(room, limits)}>
             {support === null ? `at ${at}` : `${support} at ${at}`}
           </FindingTag>
           <PanelStatus status={status} />
@@ -55,13 +59,19 @@ export function StackAnswer({ panel, limits, status }: Props) {
           ))}
         </h2>
         <p className="mt-2 text-label text-quiet">{noBreak(becauseSentence(room))}</p>
+        {cautions(room, limits).map((caution) => (
+          <Remark key={caution}>{noBreak(caution)}</Remark>
+        ))}
       </div>
       <dl
-        className={`grid grid-cols-[repeat(auto-fit,minmax(136px,1fr))] overflow-hidden border-t border-line ${stale ? "text-quiet" : ""}`}
+        className={`grid grid-cols-[repeat(auto-fit,minmax(124px,1fr))] overflow-hidden border-t border-line ${stale ? "text-quiet" : ""}`}
       >
         {figuresOf(panel).map(({ label, value, second }) => (
-          <div key={label} className="-mt-px -ml-px border-t border-l border-line px-4 py-2 first:tablet:pl-6">
-            <dt className="text-label text-quiet">{label}</dt>
+          <div
+            key={label}
+            className="-mt-px -ml-px border-t border-l border-line px-3 py-2 first:pl-4 first:tablet:pl-6"
+          >
+            <dt className="text-label text-quiet">{noBreak(label)}</dt>
             <dd>
               <span className="block text-lead font-medium">{noBreak(value)}</span>
               <span className="block text-label text-quiet">{noBreak(second)}</span>
@@ -80,21 +90,26 @@ interface PanelFigure {
 }
 
 function figuresOf({ room, hot }: StackPanel): PanelFigure[] {
-  const { film_force, shape } = room.answer;
+  const { film_force, shape, stoney, curls_below_m } = room.answer;
   const force = (value: number) =>
     formatQuantity(value, "forcePerLength", { unit: "N/m", significant: 3, trim: true, sign: true });
   return [
     shapeFigure(room, "25 °C"),
-    ...(hot ? [shapeFigure(hot, temperatureWords(hot.request.temperature_K ?? 0))] : []),
+    ...(hot ? [shapeFigure(hot, temperatureWords(hot.request.temperature_K ?? ROOM_TEMPERATURE))] : []),
     {
-      label: "Film force, device side",
+      label: "Stoney’s bow",
+      value: lengthWords(stoney.bow_m, true),
+      second: againstFreeWafer(stoney.bow_m, shape),
+    },
+    {
+      label: "Film force",
       value: force(film_force.front_N_per_m),
-      second: `back side ${force(film_force.back_N_per_m)}`,
+      second: `device side; back ${force(film_force.back_N_per_m)}`,
     },
     {
       label: "Load to curling load",
-      value: `${formatNumber(shape.stability_ratio, { significant: 2 })} to 1`,
-      second: room.answer.curls_below_m === null ? "does not curl" : `1 at ${limitWords(room.answer.curls_below_m)}`,
+      value: `${ratioWords(shape.stability_ratio)} to 1`,
+      second: curls_below_m === null ? "does not curl" : `1 at ${limitWords(curls_below_m)}`,
     },
   ];
 }

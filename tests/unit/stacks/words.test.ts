@@ -7,16 +7,18 @@ import { drawnCurve, warpChart } from "#app/lib/stack-chart.ts";
 import { csvCell, stackCsv } from "#app/lib/stack-csv.ts";
 import { viewTemperature } from "#app/lib/stack-view.ts";
 import {
+  againstFreeWafer,
+  answerOutcome,
   answerSentences,
   bareFrom,
   becauseSentence,
+  cautions,
   comparisonSentences,
   differencePercent,
   lengthWords,
   limitWords,
   radiusWords,
   shapeWords,
-  supportOutcome,
   type Estimated,
 } from "#app/lib/stack-words.ts";
 import { SUPPORT_CLASSES } from "#app/engine/vocabulary.ts";
@@ -51,6 +53,7 @@ function estimated(
 }
 
 const THICK = estimated({ thickness_m: 725e-6 });
+const SAFE = estimated({ thickness_m: 725e-6, thickness_tolerance_m: 5e-6 }, {}, { stress_Pa: 20e6 });
 const THIN = estimated({ thickness_m: 100e-6, thickness_tolerance_m: 3e-6 });
 
 describe("words for figures", () => {
@@ -115,7 +118,7 @@ describe("the answer", () => {
     expect(plain(becauseSentence(THIN))).toBe(
       "Judged at 97 µm, nominal minus tolerance: it is too thin for a gripper.",
     );
-    expect(plain(becauseSentence(THICK))).toContain("no tolerance is given");
+    expect(plain(becauseSentence(THICK))).toBe("Judged at nominal 725 µm: the silicon is thick enough.");
   });
 
   it("adds another temperature as a third sentence", () => {
@@ -127,7 +130,7 @@ describe("the answer", () => {
     const large = estimated({ diameter_m: 0.45 });
     expect(plain(answerSentences(large, null, limits)[0] ?? "")).toContain("No thickness limits are set for a 450 mm");
     expect(bareFrom(large, limits)).toBeNull();
-    expect(supportOutcome(large.answer.support.class)).toBe("cannot judge");
+    expect(answerOutcome(large, limits)).toBe("cannot judge");
   });
 
   it("of a wafer without a pull does not curl", () => {
@@ -139,13 +142,32 @@ describe("the answer", () => {
   });
 
   it("has a level for every support class", () => {
-    expect(SUPPORT_CLASSES.map(supportOutcome)).toEqual([
-      "clear",
-      "caution",
-      "needs support",
-      "needs support",
-      "do not run",
-    ]);
+    const levels = SUPPORT_CLASSES.map((support) =>
+      answerOutcome({ ...SAFE, answer: { ...SAFE.answer, support: { class: support, because: "" } } }, limits),
+    );
+    expect(levels).toEqual(["clear", "caution", "needs support", "needs support", "do not run"]);
+  });
+
+  it("is a caution where the silicon has no tolerance, or from the site's share of the curling load on", () => {
+    const at = (stability_ratio: number) => ({
+      ...SAFE,
+      answer: { ...SAFE.answer, shape: { ...SAFE.answer.shape, stability_ratio } },
+    });
+    expect(answerOutcome(SAFE, limits)).toBe("clear");
+    expect(answerOutcome(at(0.6999), limits)).toBe("clear");
+    expect(answerOutcome(at(0.7), limits)).toBe("caution");
+    expect(cautions(at(0.7), limits)).toEqual(["At 0.70 of the curling load; care is due from 0.70 on"]);
+    expect(cautions(THICK, limits)[0]).toContain("no tolerance");
+    expect(cautions(THIN, limits)).toEqual([]);
+  });
+
+  it("sets small-bow formulas against the free wafer in percent", () => {
+    const shape = { ...SAFE.answer.shape, bow_m: -100e-6 };
+    expect(plain(againstFreeWafer(-90e-6, shape))).toBe("10 % less than the free wafer");
+    expect(plain(againstFreeWafer(-103e-6, shape))).toBe("3.0 % more than the free wafer");
+    expect(plain(againstFreeWafer(-100e-6, shape))).toBe("as the free wafer");
+    expect(plain(againstFreeWafer(5e-6, shape))).toBe("the other way than the free wafer");
+    expect(plain(againstFreeWafer(-120e-6, { ...shape, regime: "curled" }))).toBe("20 % more than the edge lift");
   });
 });
 
