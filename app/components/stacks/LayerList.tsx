@@ -40,6 +40,7 @@ export function LayerList({ form, field, draft, films, selected, onSelect }: Pro
           field={layer}
           place={{ index, count: list.length, first: index === among[0], last: index === among.at(-1) }}
           draft={draft.layers[index]}
+          incomplete={draft.faults.some(({ field: name }) => name.startsWith(`layers[${index}].`))}
           films={films}
           selected={selected === index}
           onSelect={onSelect}
@@ -90,17 +91,19 @@ interface PartProps {
   field: FieldMetadata<LayerText>;
   place: { index: number; count: number; first: boolean; last: boolean };
   draft: DraftLayer | undefined;
+  /** whether something is missing or cannot be read */
+  incomplete: boolean;
   films: readonly FilmChoice[];
   selected: boolean;
   onSelect: (index: number) => void;
 }
 
-function LayerPart({ form, field, place, draft, films, selected, onSelect }: PartProps) {
+function LayerPart({ form, field, place, draft, incomplete, films, selected, onSelect }: PartProps) {
   const inBrowser = useInBrowser();
   const { index, count, first, last } = place;
   const name = draft?.name ?? `film ${index + 1}`;
-  const faulty = Object.keys(field.allErrors).length > 0;
-  const shown = selected || faulty;
+  // What the server has refused stays open until it is mended.
+  const shown = selected || (incomplete && Object.keys(field.allErrors).length > 0);
   return (
     <details id={`layer-${index}`} open={!inBrowser || shown} className="border-t border-line">
       <summary
@@ -114,7 +117,7 @@ function LayerPart({ form, field, place, draft, films, selected, onSelect }: Par
         {draft !== undefined && draft.thickness !== null && (
           <span className="text-quiet">{lengthWords(draft.thickness)}</span>
         )}
-        {faulty && <span className="text-stop">needs a look</span>}
+        {incomplete && <span className="text-stop">needs a look</span>}
         <span className="ml-auto text-label text-quiet">
           {index + 1} of {count}
         </span>

@@ -87,7 +87,7 @@ export function StackEditor(props: Props) {
                     }}
                   />
                 </div>
-                <div className="border-line max-[700px]:border-t @min-[700px]:border-l">
+                <div className="border-line @max-[700px]:border-t @min-[700px]:border-l">
                   <LayerList
                     form={form}
                     field={fields.layers}
