@@ -18,7 +18,7 @@ export function StackPanes({ build, answer, findings }: Props) {
       <div className="order-2 min-w-0 border-ink max-wide:border-y wide:order-none wide:border-r">{build}</div>
       <aside
         aria-label="What follows from the stack"
-        className="contents wide:sticky wide:top-0 wide:block wide:max-h-dvh wide:self-start wide:overflow-y-auto print:max-h-none"
+        className="contents wide:sticky wide:top-0 wide:block wide:self-start"
       >
         <div className="order-1 min-w-0">{answer}</div>
         <div className="order-3 min-w-0 max-wide:[&>:first-child]:border-t-0">{findings}</div>
