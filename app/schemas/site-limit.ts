@@ -1,7 +1,8 @@
 import { z } from "zod";
 import { LIMIT_DEFINITIONS, type LimitDefinition, type LimitKey } from "#app/engine/rules/limits.ts";
 import { limitQuantity } from "#app/lib/limit-quantity.ts";
-import { quantity, type PhysicalRange } from "./quantity.ts";
+import type { PhysicalRange } from "#app/lib/read-quantity.ts";
+import { quantity } from "./quantity.ts";
 
 const definitions: Record<LimitKey, LimitDefinition> = LIMIT_DEFINITIONS;
 

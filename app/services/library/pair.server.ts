@@ -6,7 +6,7 @@ import type { Measured } from "#app/engine/measured.ts";
 import { cannotRelease, estimatePair, type PairInput } from "#app/lib/pair.ts";
 import type { PairTrial, TriedPair } from "#app/lib/pair-trial.ts";
 import type { LibraryRecords } from "#app/schemas/library-records.ts";
-import { readQuantity } from "#app/schemas/quantity.ts";
+import { readQuantity } from "#app/lib/read-quantity.ts";
 import { RULES } from "#app/schemas/ranges.ts";
 import { inScope, type ActorScope } from "#app/server/scope.server.ts";
 import { bondingMaterialInput } from "../flows/flow-inputs.ts";

@@ -85,6 +85,7 @@ describe("a wafer as it lies", () => {
     stabilityRatio: 0.2,
     rollRadius: null,
     standardUncertainty: null,
+    working: null,
   };
 
   it("has its centre low while its edges are up, whichever side is up", () => {
