@@ -19,7 +19,7 @@ const PER_KELVIN: CubicStiffness = { c11: -9.4e-5, c12: -9.8e-5, c44: -8.3e-5 };
 
 const REFERENCE_TEMPERATURE = 298.15;
 
-export const SILICON_STIFFNESS_SOURCE: SourceId = "silicon-properties-note";
+const SILICON_STIFFNESS_SOURCE: SourceId = "silicon-properties-note";
 
 /**
  * Elastic constants of silicon, Pa, at `temperature` (K, default 298.15), linear in temperature from the values at 25 °C.
