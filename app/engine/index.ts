@@ -101,6 +101,7 @@ export { directionalStoneyWorking, edgeReliefWorking, patternedFilmWorking } fro
 
 // Own weight, chuck, strength, thickness, die
 export { gravitySag, STANDARD_GRAVITY, type GravitySag, type GravitySagInput } from "./gravity/gravity-sag.ts";
+export { siliconSagConstants } from "./gravity/silicon-sag-constants.ts";
 export type { Support } from "./gravity/support.ts";
 export { gravitySagWorking, largeSagWorking } from "./gravity/working.ts";
 export { chuckFlattening, type ChuckFlattening, type ChuckFlatteningInput } from "./chuck/chuck-flattening.ts";

@@ -277,6 +277,13 @@ export const SOURCES = {
     place: "free edge exact for every harmonic; rails cut into 40 points with four-fold symmetry",
     basis: "own computation",
   },
+  "plate-gravity-cubic": {
+    author: "this program",
+    title: "Circular plate of silicon (100) with cubic stiffness under its own weight, by Ritz in polynomials",
+    year: null,
+    place: "degree 14, against the same with isotropic constants, which leaves the stiffness of the basis out",
+    basis: "own computation",
+  },
   "plate-gravity-large": {
     author: "this program",
     title: "Circular plate under its own weight, von Karman's energy minimised in polynomials",

@@ -13,7 +13,7 @@ export interface GravitySagInput {
   radius: number;
   /** m; of a pair or a thick film its effective thickness only together with a density that keeps the weight. */
   thickness: number;
-  /** Pa; for silicon `siliconPlateConstants`. */
+  /** Pa; for silicon `siliconSagConstants`. */
   youngsModulus: number;
   /** 0 to 0.4999 */
   poissonsRatio: number;
@@ -50,8 +50,9 @@ export interface GravitySag {
  * for rails. Large deflections, where known: a ring under the rim (von Karman, full symmetry) within 0.1 %, three points at the
  * rim (threefold symmetry) within 1 % up to a load of 300, else a band of 0.6 to 1.0 of the linear sag.
  *
- * Silicon (100) may be taken as isotropic with its plate constants: within 0.03 % on a ring, 0.1 % on three points. A wafer
- * bent by films, or thin enough to roll, takes another shape under its weight: sag and bow do not add then.
+ * Silicon (100) stands as isotropic with the constants of `siliconSagConstants`, which states the error: 0.03 % on a ring under
+ * the rim, 0.8 % on three points there, more on inner points and rails. A wafer bent by films, or thin enough to roll, takes
+ * another shape under its weight: sag and bow do not add then.
  * Bad input throws `EngineInputError`.
  *
  * Source: Timoshenko and Woinowsky-Krieger 1959; Chen 2003, equation 47.75; Nelson, Lubliner and Mast 1982 for points; own

@@ -14,6 +14,7 @@ import { gravitySag } from "#app/engine/gravity/gravity-sag.ts";
 import { linearSag } from "#app/engine/gravity/linear-sag.ts";
 import { edgeRingRatio, threePointRatio } from "#app/engine/gravity/large-sag.ts";
 import { pointSag } from "#app/engine/gravity/point-sag.ts";
+import { siliconSagConstants } from "#app/engine/gravity/silicon-sag-constants.ts";
 import type { Support } from "#app/engine/gravity/support.ts";
 import { siliconPlateConstants } from "#app/engine/silicon/plane-constants.ts";
 import { relative } from "../relative.ts";
@@ -153,6 +154,31 @@ describe("coefficients of q a⁴/D", () => {
     expect(relative(peakToValley, expected)).toBeLessThan(tolerance);
     // Letting go where a rail would pull makes it sag more, never less.
     if (at >= 0.9) expect(peakToValley).toBeGreaterThan(expected);
+  });
+});
+
+describe("silicon (100) on rails, against a plate with cubic stiffness (Ritz in polynomials of degree 14)", () => {
+  /** Sag with cubic stiffness over that with the constants averaged over the plane, rails across <100> and <110>. */
+  it.each([
+    [0.3, "100", 1.089, 0.05],
+    [0.6, "100", 1.1503, 0.02],
+    [0.75, "100", 1.17, 0.025],
+    [0.75, "110", 0.8756, 0.01],
+    [0.95, "100", 1.2682, 0.006],
+    [0.95, "110", 0.8269, 0.006],
+  ] as const)("at %d across <%s>: %d, within %d", (at, across, expected, tolerance) => {
+    const support: Support = { kind: "rails", halfSpacing: at * 0.15 };
+    const wafer = { radius: 0.15, thickness: 775e-6, density: 2329, support };
+    const own = gravitySag({ ...wafer, ...siliconSagConstants("100", support, across) }).peakToValley;
+    const averaged = gravitySag({ ...wafer, ...siliconPlateConstants("100") }).peakToValley;
+    expect(relative(own / averaged, expected)).toBeLessThan(tolerance);
+  });
+
+  it("takes the averaged constants on other supports, and the isotropic ones of (111)", () => {
+    const ring: Support = { kind: "edge-ring" };
+    expect(siliconSagConstants("100", ring)).toEqual(siliconPlateConstants("100"));
+    const rails: Support = { kind: "rails", halfSpacing: 0.1 };
+    expect(siliconSagConstants("111", rails)).toEqual(siliconPlateConstants("111"));
   });
 });
 
