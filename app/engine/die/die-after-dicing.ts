@@ -36,7 +36,7 @@ export interface DieAfterDicing {
 }
 
 /** 25 to 260 °C, the peak of a usual lead-free reflow. */
-const DEFAULT_TEMPERATURES = Array.from({ length: 48 }, (_, n) => 298.15 + 5 * n);
+const DEFAULT_TEMPERATURES = /* @__PURE__ */ Array.from({ length: 48 }, (_, n) => 298.15 + 5 * n);
 
 /** Share of the critical load at which a free disc departs from small deflections by 5 %: S = 0.22 of 1.43. */
 const LINEAR_SHARE = 0.15;

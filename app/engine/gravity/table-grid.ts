@@ -12,16 +12,16 @@ function grid(first: number, last: number, count: number): Grid {
 }
 
 /** Poisson's ratio, in all tables. */
-export const RATIO_GRID = grid(0, 0.45, 4);
+export const RATIO_GRID = /* @__PURE__ */ grid(0, 0.45, 4);
 
 /** Rails by the angle from the axis across them to their ends: half spacing over radius is its cosine. */
-export const RAIL_GRID = grid(Math.acos(RAILS_RANGE.high), Math.acos(RAILS_RANGE.low), 37);
+export const RAIL_GRID = /* @__PURE__ */ grid(Math.acos(RAILS_RANGE.high), Math.acos(RAILS_RANGE.low), 37);
 
 /** Edge ring: decimal logarithm of the load Q. */
-export const RING_GRID = grid(-1, 7, 33);
+export const RING_GRID = /* @__PURE__ */ grid(-1, 7, 33);
 
 /** Three points at the rim: natural logarithm of the load Q, 3 to 300. */
-export const POINT_GRID = grid(Math.log(3), Math.log(300), 13);
+export const POINT_GRID = /* @__PURE__ */ grid(Math.log(3), Math.log(300), 13);
 
 /** The places of a grid. */
 export function places({ first, step, count }: Grid): number[] {

@@ -64,12 +64,12 @@ export const STRENGTH_DATA: readonly StrengthDatum[] = [
     weibullModulus: null,
     source: "chen-ayon-spearing-1998",
   },
-  range("rough ground", 150e6, 350e6, 2, 5),
-  range("fine ground", 300e6, 700e6, 3, 8),
-  range("dry polished", 600e6, 1200e6, 4, 8),
-  range("wet etched", 360e6, 2100e6, 3, 8, "From 1.2 times fine ground to 3 times after a deep etch."),
-  range("plasma etched", 410e6, 1500e6, 4, 10),
-  range("chemically mechanically polished", 800e6, 1800e6, 5, 12),
+  /* @__PURE__ */ range("rough ground", 150e6, 350e6, 2, 5),
+  /* @__PURE__ */ range("fine ground", 300e6, 700e6, 3, 8),
+  /* @__PURE__ */ range("dry polished", 600e6, 1200e6, 4, 8),
+  /* @__PURE__ */ range("wet etched", 360e6, 2100e6, 3, 8, "From 1.2 times fine ground to 3 times after a deep etch."),
+  /* @__PURE__ */ range("plasma etched", 410e6, 1500e6, 4, 10),
+  /* @__PURE__ */ range("chemically mechanically polished", 800e6, 1800e6, 5, 12),
 ];
 
 function range(
