@@ -1,6 +1,6 @@
-import { createHash } from "node:crypto";
 import type { EntityManager } from "@mikro-orm/postgresql";
 import type { Outcome } from "#app/engine/vocabulary.ts";
+import { inputHash } from "../assessments/input-hash.server.ts";
 import { readLimits } from "../limits.server.ts";
 import { flowInputOf, type FlowDetail } from "./flow-detail.ts";
 
@@ -40,8 +40,7 @@ export async function flowAssessments(em: EntityManager, flow: FlowDetail): Prom
     [flow.id],
   );
   if (rows.length === 0) return [];
-  const now = { flow: flowInputOf(flow), limits: await readLimits(em) };
-  const hash = createHash("sha256").update(JSON.stringify(now)).digest("hex");
+  const hash = inputHash({ flow: flowInputOf(flow), limits: await readLimits(em) });
   return rows.map((row) => ({
     id: row.id,
     number: row.number,
