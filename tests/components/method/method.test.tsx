@@ -3,9 +3,9 @@ import { Cautions } from "#app/components/cautions/Cautions.tsx";
 import { CAUTION_SIGNS } from "#app/components/method/CautionSign.tsx";
 import { MethodView } from "#app/components/method/MethodView.tsx";
 import { leftOut } from "#app/components/method/method-words.ts";
-import type { RuleText } from "#app/components/method/RuleEntry.tsx";
 import { EQUATIONS } from "#app/engine/equations.ts";
 import { SOURCES } from "#app/engine/sources.ts";
+import type { RuleText } from "#app/schemas/rule-text.ts";
 import { attributes, render, words } from "#tests/components/drawings/render.ts";
 import { strangeCharacters } from "#tests/components/glyphs.ts";
 
