@@ -1,25 +1,13 @@
 import { raw, type QueryOrderMap } from "@mikro-orm/postgresql";
 import { Assessment } from "#app/db/entities/assessment.ts";
-import { OUTCOMES, type Outcome } from "#app/engine/vocabulary.ts";
+import { OUTCOMES } from "#app/engine/vocabulary.ts";
 import { PAGE_SIZE, type ListPage, type ListParams } from "#app/lib/list-params.ts";
+import type { AssessmentRow } from "#app/schemas/assessment-row.ts";
 import { inScope, type ActorScope } from "#app/server/scope.server.ts";
 import { escapeLike } from "../like.server.ts";
 import { programFilter } from "../program-filter.server.ts";
 
 export const ASSESSMENT_SORTS = ["run", "flow", "outcome"] as const;
-
-export interface AssessmentRow {
-  id: string;
-  documentNumber: number;
-  flow: string;
-  program: string;
-  programSlug: string;
-  outcome: Outcome;
-  createdAt: string;
-  createdBy: string;
-  /** the flow itself has been changed since */
-  flowChanged: boolean;
-}
 
 /** What a list shows: results are long, and it needs nothing of them. */
 const LISTED = [

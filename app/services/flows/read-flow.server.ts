@@ -3,11 +3,11 @@ import { FlowStepFilm } from "#app/db/entities/flow-step-film.ts";
 import { FlowStep } from "#app/db/entities/flow-step.ts";
 import { Flow } from "#app/db/entities/flow.ts";
 import { mayInProgram } from "#app/policies/permissions.ts";
+import type { FlowDetail, StepDetail, StepFilmDetail } from "#app/schemas/flow-view.ts";
 import { notFound } from "#app/server/problem.server.ts";
 import type { ActorScope } from "#app/server/scope.server.ts";
 import { requireInProgram } from "../permission.server.ts";
 import { stampOf } from "../record.server.ts";
-import type { FlowDetail, StepDetail, StepFilmDetail } from "./flow-detail.ts";
 import { bondingMaterialInput, carrierInput, equipmentInput, filmInput } from "./flow-inputs.ts";
 
 /** The flow that an id names, if the person may see it. */
