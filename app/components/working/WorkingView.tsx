@@ -49,9 +49,7 @@ export function WorkingView({ working, level = 3 }: WorkingViewProps) {
       <p className="mt-2 text-label text-quiet">
         <Formula text={[note, equation.range, equation.caution].filter(Boolean).join(" ")} />
       </p>
-      <p className="mt-1 text-label text-quiet">
-        Sources: {equation.sources.map(shortCitation).join("; ")}.
-      </p>
+      <p className="mt-1 text-label text-quiet">Sources: {equation.sources.map(shortCitation).join("; ")}.</p>
       {from.length > 0 && (
         <div className="mt-3 space-y-4 border-l border-edge pl-4">
           {from.map((part, index) => (
