@@ -4,7 +4,7 @@ import { KIND_KEYS, type KindSlug } from "#app/lib/library-kinds.ts";
 import type { ActorScope } from "#app/server/scope.server.ts";
 import { scopeOfPerson } from "#tests/db/people.ts";
 import { asOwner, useDatabase } from "#tests/db/test-database.ts";
-import { MONITOR_PARAMETERS } from "#tests/fixtures/monitor-profile.ts";
+import { MONITOR_PARAMETERS } from "#app/db/seeders/demo-monitor.ts";
 
 const database = useDatabase({ demo: true });
 
