@@ -2,6 +2,8 @@ import type { Page } from "@playwright/test";
 import { assessTern } from "./assess.ts";
 import { expect, expectNoAxeFindings, signIn, test } from "./support.ts";
 
+test.slow();
+
 const places = (page: Page) => page.getByRole("navigation", { name: "Places" });
 const current = (page: Page) => places(page).locator("[aria-current=page]");
 
