@@ -16,11 +16,8 @@ export function plainDrawing(sources: Sources, state: GeneratorState): Drawing {
   const u = new Float64Array(BLOCK * bounded);
   const words = new Int32Array(Math.max(wordsForNormals(z.length), 2 * u.length));
   return (block, rows) => {
-    startFromBest(sources, block, rows);
-    if (normals > 0) {
-      fillNormals(state, z, rows * normals, words);
-      addNormals(sources, block, rows, z);
-    }
+    if (normals > 0) fillNormals(state, z, rows * normals, words);
+    placeNormals(sources, block, rows, z);
     if (bounded > 0) {
       fillUniforms(state, u, rows * bounded, words);
       addBounded(sources, block, rows, u);
@@ -28,25 +25,27 @@ export function plainDrawing(sources: Sources, state: GeneratorState): Drawing {
   };
 }
 
-/** Sets each row to the best estimates. */
-export function startFromBest({ best }: Sources, block: Float64Array, rows: number): void {
-  const width = best.length;
-  for (let row = 0; row < rows; row += 1) {
-    const at = row * width;
-    for (let n = 0; n < width; n += 1) block[at + n] = best[n] ?? 0;
-  }
-}
-
-/** Adds the normal sources, standard normal and independent in `z` row by row; `z` is overwritten where they are correlated. */
-export function addNormals(sources: Sources, block: Float64Array, rows: number, z: Float64Array): void {
+/**
+ * Sets each row to the best estimates with the normal sources added, standard normal and independent in `z` row by row; `z` is
+ * overwritten where they are correlated.
+ */
+export function placeNormals(sources: Sources, block: Float64Array, rows: number, z: Float64Array): void {
   const { best, lower } = sources;
-  const { input, scale } = sources.normal;
+  const { input, scale, everyInput } = sources.normal;
   const count = input.length;
   const width = best.length;
   if (lower) correlate(lower, count, rows, z);
+  if (everyInput) {
+    for (let row = 0; row < rows; row += 1) {
+      const at = row * width;
+      for (let n = 0; n < width; n += 1) block[at + n] = (best[n] ?? 0) + (scale[n] ?? 0) * (z[at + n] ?? 0);
+    }
+    return;
+  }
   for (let row = 0; row < rows; row += 1) {
     const at = row * width;
     const from = row * count;
+    for (let n = 0; n < width; n += 1) block[at + n] = best[n] ?? 0;
     for (let n = 0; n < count; n += 1) {
       const place = at + (input[n] ?? 0);
       block[place] = (block[place] ?? 0) + (scale[n] ?? 0) * (z[from + n] ?? 0);

@@ -1,4 +1,4 @@
-import { BLOCK, addBounded, addNormals, startFromBest, type Drawing } from "./drawing.ts";
+import { BLOCK, addBounded, placeNormals, type Drawing } from "./drawing.ts";
 import { fillUniforms, fillWords, type GeneratorState } from "./random/generator.ts";
 import { rootSumOfSquares } from "./random/elementary.ts";
 import { inverseNormal } from "./random/inverse-normal.ts";
@@ -46,12 +46,11 @@ export function latticeDrawing(sources: Sources, slopes: Float64Array, points: n
   }
   let index = 0;
   return (block, rows) => {
-    startFromBest(sources, block, rows);
     if (normals > 0) {
       fillNormals(state, z, (rows >> 1) * normals, words);
       spread(z, rows, direction, (row) => inverseNormal(Math.min(LARGEST, (index + row + (shift[0] ?? 0)) / points)));
-      addNormals(sources, block, rows, z);
     }
+    placeNormals(sources, block, rows, z);
     if (bounded > 0) {
       for (let row = 0; row < rows; row += 1) {
         for (let n = 0; n < bounded; n += 1) {

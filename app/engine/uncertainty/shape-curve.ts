@@ -11,8 +11,8 @@ export interface ShapeCurve {
 }
 
 /** Nodes up to the load at which the disc rolls, and beyond it up to `FARTHEST` times that load. */
-const BEFORE = 256;
-const BEYOND = 2048;
+const BEFORE = 192;
+const BEYOND = 1024;
 const FARTHEST = 60;
 
 /**

@@ -7,7 +7,8 @@ import { checkQuantities, spreadUncertainty, type Spread, type UncertainQuantity
  */
 export interface Sources {
   best: Float64Array;
-  normal: { input: Int32Array; scale: Float64Array };
+  /** `everyInput` when each input has exactly one, in their order */
+  normal: { input: Int32Array; scale: Float64Array; everyInput: boolean };
   /** lower triangle that correlates the normal sources, or null */
   lower: Float64Array | null;
   bounded: { input: Int32Array; halfWidth: Float64Array; triangular: Uint8Array };
@@ -43,6 +44,7 @@ export function sourcesOf(
     normal: {
       input: Int32Array.from(normal, ({ input }) => input),
       scale: Float64Array.from(normal, ({ spread }) => spreadUncertainty(spread)),
+      everyInput: normal.length === quantities.length && normal.every(({ input }, n) => input === n),
     },
     lower: matrix && lowerTriangle(matrixOf(normal, matrix, quantities.length), normal.length),
     bounded: {

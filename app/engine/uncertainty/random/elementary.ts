@@ -50,15 +50,21 @@ export function portableLog(x: number): number {
   return power * LN2_HIGH + (2 * ratio + (2 * ratio * series + power * LN2_LOW));
 }
 
+/** 2^n for n from −NEAR to NEAR. */
+const NEAR = 64;
+const powers = new Float64Array(2 * NEAR + 1).fill(1);
+for (let n = 1; n <= NEAR; n += 1) {
+  powers[NEAR + n] = 2 * (powers[NEAR + n - 1] ?? 0);
+  powers[NEAR - n] = (powers[NEAR - n + 1] ?? 0) / 2;
+}
+
 /** x 2^power, exact while it stays a normal number. */
 function scaled(x: number, power: number): number {
   let result = x;
   let left = power;
-  for (; left >= 16; left -= 16) result *= 65536;
-  for (; left <= -16; left += 16) result /= 65536;
-  for (; left > 0; left -= 1) result *= 2;
-  for (; left < 0; left += 1) result /= 2;
-  return result;
+  for (; left > NEAR; left -= NEAR) result *= powers[2 * NEAR] ?? 0;
+  for (; left < -NEAR; left += NEAR) result *= powers[0] ?? 0;
+  return result * (powers[NEAR + left] ?? 0);
 }
 
 /** Square root of the sum of squares, in the order given: `Math.hypot` is not the same everywhere. */
