@@ -146,6 +146,7 @@ export {
   type FirstOrderInput,
   type FirstOrderUncertainty,
 } from "./uncertainty/first-order.ts";
+export { firstOrderShare, type FirstOrderShare } from "./uncertainty/first-order-share.ts";
 export { inverseNormal, normalShareBelow } from "./uncertainty/random/inverse-normal.ts";
 export {
   sampleUncertainty,

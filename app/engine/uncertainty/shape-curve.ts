@@ -18,8 +18,8 @@ const FARTHEST = 60;
 /**
  * `freeWaferShape` for sampling: bows of a disc of given radius and material for any curvature (1/m) and thickness (m), read from
  * a curve through it. Without dimensions the shape depends on the load alone, κ R²/(4h), so one curve serves every draw. Within
- * 1e-4 of `freeWaferShape` (measured: 3e-5) up to 60 times the load at which the disc rolls; beyond that it is asked itself.
- * Building it takes some 2000 shapes, so build it once for all steps with the same disc.
+ * 1e-4 of `freeWaferShape` (measured: 5e-5) up to 60 times the load at which the disc rolls; beyond that it is asked itself.
+ * Building it takes some 1200 shapes, so build it once for all steps with the same disc.
  * @throws EngineInputError as `freeWaferShape` does, for the disc
  */
 export function shapeCurve(disc: Omit<PlateInput, "thickness">): ShapeCurve {

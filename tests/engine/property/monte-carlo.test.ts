@@ -81,6 +81,22 @@ describe.each(SAMPLING_METHODS)("%s draws", (method) => {
     expect(relative(found.standardUncertainty, Math.sqrt(1 + 4 - 2.4))).toBeLessThan(0.02);
   });
 
+  it("take normal and bounded inputs together, both parts of each, and more of them than a lattice has places", () => {
+    const many = Array.from({ length: 45 }, (_, n): UncertainQuantity => {
+      const name = `input ${n}`;
+      return n % 3 === 0
+        ? { ...normal(name, 1, 1), betweenWafers: { distribution: "triangular", halfWidth: Math.sqrt(6) } }
+        : bounded(name, 1, Math.sqrt(3));
+    });
+    const found = sampleUncertainty({ model: sum, inputs: many, draws: 2 ** 14, seed: 9, method });
+    expect(Math.abs(found.mean - 45)).toBeLessThan(4 * found.standardErrorOfMean + 1e-10);
+    // Variance 1 of each of 60 sources; four standard errors of a standard deviation.
+    expect(relative(found.standardUncertainty, Math.sqrt(60))).toBeLessThan(4 / Math.sqrt(2 ** 15));
+    const chance = found.chanceAbove(45 + Math.sqrt(60));
+    // So many sources add up to a normal figure within 0.001.
+    expect(Math.abs(chance.probability - normalShareBelow(-1))).toBeLessThan(4 * chance.standardError + 1e-3);
+  });
+
   it("are the same for the same seed and others for another", () => {
     const run = (seed: number) =>
       sampleUncertainty({ model: bent, inputs: bentInputs, draws: 1000, seed, method }).mean;

@@ -8,6 +8,7 @@
 import { describe, expect, it } from "vitest";
 import { EngineInputError } from "#app/engine/errors.ts";
 import { firstOrderUncertainty } from "#app/engine/uncertainty/first-order.ts";
+import { firstOrderShare } from "#app/engine/uncertainty/first-order-share.ts";
 import { lotSampling, lotShare } from "#app/engine/uncertainty/lot.ts";
 import { spreadUncertainty, uncertainQuantity, type UncertainQuantity } from "#app/engine/uncertainty/quantity.ts";
 import { normalShareBelow } from "#app/engine/uncertainty/random/inverse-normal.ts";
@@ -201,6 +202,15 @@ describe("lots", () => {
     expect(Math.abs(wafersOnly.share - normalShareBelow(-1.5))).toBeLessThan(4 * wafersOnly.standardError);
     const commonOnly = lotShare({ ...lot, inputs: [normal("a", 0, 2, 0)], wafers: 16 });
     expect(commonOnly.noneBeyond).toBeCloseTo(1 - commonOnly.share, 12);
+  });
+
+  it("have the same share by first order where the figure is straight", () => {
+    const { share, interval } = firstOrderShare(firstOrderUncertainty(lot), lot.limit);
+    expect(share).toBeCloseTo(moment(1), 10);
+    expect(interval).toEqual([expect.closeTo(shareGiven(-2), 12), expect.closeTo(shareGiven(2), 12)]);
+    const certain = firstOrderUncertainty({ ...lot, inputs: [normal("a", 0, 1)] });
+    expect(firstOrderShare(certain, 1.5)).toEqual({ share: normalShareBelow(-1.5), interval: [0, 1] });
+    expect(firstOrderShare(certain, 2.5).interval).toEqual([0, 0]);
   });
 
   it("report how far they are", () => {

@@ -51,18 +51,19 @@ export function fillNormals(state: GeneratorState, out: Float64Array, count: num
   for (let four = 0; four < fours; four += 1) {
     const n = 4 * four;
     const picks = words[count + four] ?? 0;
-    out[n] = tried(state, picks & 255, words[n] ?? 0);
-    out[n + 1] = tried(state, (picks >>> 8) & 255, words[n + 1] ?? 0);
-    out[n + 2] = tried(state, (picks >>> 16) & 255, words[n + 2] ?? 0);
-    out[n + 3] = tried(state, picks >>> 24, words[n + 3] ?? 0);
+    tried(state, out, n, picks & 255, words[n] ?? 0);
+    tried(state, out, n + 1, (picks >>> 8) & 255, words[n + 1] ?? 0);
+    tried(state, out, n + 2, (picks >>> 16) & 255, words[n + 2] ?? 0);
+    tried(state, out, n + 3, picks >>> 24, words[n + 3] ?? 0);
   }
   const last = words[count + fours] ?? 0;
-  for (let n = 4 * fours; n < count; n += 1) out[n] = tried(state, (last >>> ((n & 3) << 3)) & 255, words[n] ?? 0);
+  for (let n = 4 * fours; n < count; n += 1) tried(state, out, n, (last >>> ((n & 3) << 3)) & 255, words[n] ?? 0);
 }
 
-function tried(state: GeneratorState, layer: number, word: number): number {
+function tried(state: GeneratorState, out: Float64Array, n: number, layer: number, word: number): void {
   const x = word * (widths[layer] ?? 0);
-  return Math.abs(x) < (inside[layer] ?? 0) ? x : retried(state, layer, x);
+  out[n] = x;
+  if (!(Math.abs(x) < (inside[layer] ?? 0))) retry(state, out, n, layer);
 }
 
 const spare = new Int32Array(4);
@@ -72,18 +73,26 @@ function spareUniform(state: GeneratorState): number {
   return uniformOf(spare[0] ?? 0, spare[1] ?? 0);
 }
 
-/** A normal number when the first try at `x` in `layer` has left the part wholly under the curve. */
-function retried(state: GeneratorState, layer: number, x: number): number {
-  for (;;) {
-    if (Math.abs(x) < (inside[layer] ?? 0)) return x;
-    if (layer === 0) return tail(state, x < 0);
+/**
+ * Decides on the try in `out[n]` that has left the part of its layer wholly under the curve, and tries again until one holds.
+ * Once in eighty.
+ */
+function retry(state: GeneratorState, out: Float64Array, n: number, first: number): void {
+  let layer = first;
+  let x = out[n] ?? 0;
+  while (!(Math.abs(x) < (inside[layer] ?? 0))) {
+    if (layer === 0) {
+      x = tail(state, x < 0);
+      break;
+    }
     const low = heights[layer] ?? 0;
     const high = heights[layer + 1] ?? 0;
-    if (low + spareUniform(state) * (high - low) < density(x)) return x;
+    if (low + spareUniform(state) * (high - low) < density(x)) break;
     fillWords(state, spare, 2);
     layer = (spare[1] ?? 0) >>> 24;
     x = (spare[0] ?? 0) * (widths[layer] ?? 0);
   }
+  out[n] = x;
 }
 
 /** A normal number beyond `EDGE`, by Marsaglia's method for the tail. */
