@@ -2,6 +2,7 @@ import { spawnSync } from "node:child_process";
 import { fileURLToPath } from "node:url";
 
 const python = "/usr/bin/python3";
+const installer = "/usr/bin/apt-get";
 
 /** One thread, whatever library NumPy was built with. */
 const oneThread = { OMP_NUM_THREADS: "1", OPENBLAS_NUM_THREADS: "1", MKL_NUM_THREADS: "1" };
@@ -19,7 +20,11 @@ export function needNumpy() {
   if (hasNumpy()) return null;
   if (process.getuid?.() !== 0)
     return "Without NumPy there is nothing to compare with: install Debian's python3-numpy as root, then run this again.";
-  spawnSync("apt-get", ["install", "-y", "--no-install-recommends", "python3-numpy"], { stdio: "ignore" });
+  const options = { stdio: "ignore", env: { ...process.env, DEBIAN_FRONTEND: "noninteractive" } };
+  const wait = ["-o", "DPkg::Lock::Timeout=300"];
+  // An update that fails is no reason to stop: the lists at hand may do.
+  spawnSync(installer, [...wait, "update"], options);
+  spawnSync(installer, [...wait, "install", "-y", "--no-install-recommends", "python3-numpy"], options);
   return hasNumpy() ? null : "Debian's python3-numpy could not be installed, so there is nothing to compare with.";
 }
 
