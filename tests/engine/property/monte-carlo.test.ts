@@ -131,6 +131,24 @@ describe.each(SAMPLING_METHODS)("%s draws", (method) => {
   });
 });
 
+describe.each(SAMPLING_METHODS)("%s draws of bounded inputs", (method) => {
+  it("are unbiased for a figure that bends, with standard errors that hold", () => {
+    const halfWidth = 0.2;
+    const inputs = [bounded("force", 10, 1, "triangular"), bounded("thickness", 1, halfWidth)];
+    const model = ([force = 0, thickness = 1]: Float64Array) => force / (thickness * thickness);
+    // The mean of 1/h² for h even from 1 − a to 1 + a is 1/(1 − a²).
+    const expected = 10 / (1 - halfWidth * halfWidth);
+    const runs = Array.from({ length: 60 }, (_, seed) =>
+      sampleUncertainty({ model, inputs, draws: 1024, seed, method }),
+    );
+    const errors = runs.map(({ mean }) => mean - expected);
+    const mean = errors.reduce((total, error) => total + error, 0) / errors.length;
+    expect(Math.abs(mean)).toBeLessThan((4 * standardDeviation(errors)) / Math.sqrt(errors.length));
+    const covered = runs.filter((run) => Math.abs(run.mean - expected) < 2 * run.standardErrorOfMean);
+    expect(covered.length).toBeGreaterThanOrEqual(51);
+  });
+});
+
 describe("what the methods save", () => {
   const errorOf = (method: SamplingMethod) => {
     const runs = Array.from({ length: 24 }, (_, seed) =>
