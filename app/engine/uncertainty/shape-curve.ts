@@ -59,7 +59,7 @@ export function shapeCurve(disc: Omit<PlateInput, "thickness">): ShapeCurve {
 }
 
 /** Beyond the onset the bow departs like a square root, so the nodes are even in that of the load over the onset. */
-const REACH = Math.sqrt(FARTHEST - 1);
+const REACH = /* @__PURE__ */ Math.sqrt(FARTHEST - 1);
 
 function loadAt(node: number): number {
   if (node <= BEFORE) return node / BEFORE;

@@ -8,11 +8,15 @@ const LN2_HIGH = 6.9314718036912381649e-1;
 const LN2_LOW = 1.90821492927058770002e-10;
 const LN2 = 0.6931471805599453;
 
-/** 1/n! for n from 0 to 15. */
-const reciprocalFactorials = new Float64Array(16).fill(1);
-for (let n = 1; n < 16; n += 1) reciprocalFactorials[n] = (reciprocalFactorials[n - 1] ?? 0) / n;
-/** 1/n for n up to 23. */
-const reciprocals = Float64Array.from({ length: 24 }, (_, n) => 1 / n);
+/** 1/n! for n from 0 to 15, and 1/n for n up to 23. */
+const reciprocalFactorials = /* @__PURE__ */ inverseFactorials(16);
+const reciprocals = /* @__PURE__ */ Float64Array.from({ length: 24 }, (_, n) => 1 / n);
+
+function inverseFactorials(length: number): Float64Array {
+  const inverse = new Float64Array(length).fill(1);
+  for (let n = 1; n < length; n += 1) inverse[n] = (inverse[n - 1] ?? 0) / n;
+  return inverse;
+}
 
 /** e^x within 2e-16 of its size (measured), for x from −700 to 700. Own arrangement: halvings of ln 2, then Taylor's series. */
 export function portableExp(x: number): number {
@@ -52,10 +56,15 @@ export function portableLog(x: number): number {
 
 /** 2^n for n from −NEAR to NEAR. */
 const NEAR = 64;
-const powers = new Float64Array(2 * NEAR + 1).fill(1);
-for (let n = 1; n <= NEAR; n += 1) {
-  powers[NEAR + n] = 2 * (powers[NEAR + n - 1] ?? 0);
-  powers[NEAR - n] = (powers[NEAR - n + 1] ?? 0) / 2;
+const powers = /* @__PURE__ */ powersOfTwo();
+
+function powersOfTwo(): Float64Array {
+  const power = new Float64Array(2 * NEAR + 1).fill(1);
+  for (let n = 1; n <= NEAR; n += 1) {
+    power[NEAR + n] = 2 * (power[NEAR + n - 1] ?? 0);
+    power[NEAR - n] = (power[NEAR - n + 1] ?? 0) / 2;
+  }
+  return power;
 }
 
 /** x 2^power, exact while it stays a normal number. */

@@ -37,9 +37,9 @@ function flat(pairs: readonly [number, number][]): Float64Array {
   return Float64Array.from(pairs.toReversed().flat());
 }
 
-const central = flat(CENTRAL);
-const shoulder = flat(SHOULDER);
-const tails = flat(TAIL);
+const central = /* @__PURE__ */ flat(CENTRAL);
+const shoulder = /* @__PURE__ */ flat(SHOULDER);
+const tails = /* @__PURE__ */ flat(TAIL);
 
 function ratio(coefficients: Float64Array, r: number): number {
   let above = 0;

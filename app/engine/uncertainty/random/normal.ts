@@ -8,28 +8,26 @@ const LAYERS = 256;
 const WORD = 2147483648;
 
 /** Right edges of the layers, the lowest first and wider than `EDGE` by its tail; the curve's height at each. */
-const edges = new Float64Array(LAYERS + 1);
-const heights = new Float64Array(LAYERS + 1);
+const edges = /* @__PURE__ */ edgesOfLayers();
+const heights = /* @__PURE__ */ edges.map(density);
 /** Edge per unit of a signed 32-bit word, and the part of a layer that lies wholly under the curve. */
-const widths = new Float64Array(LAYERS);
-const inside = new Float64Array(LAYERS);
+const widths = /* @__PURE__ */ edges.map((edge) => edge / WORD);
+const inside = /* @__PURE__ */ edges.map((_, layer) => edges[layer + 1] ?? 0);
 
 function density(x: number): number {
   return portableExp((-x * x) / 2);
 }
 
-edges[0] = AREA / density(EDGE);
-edges[1] = EDGE;
-for (let n = 2; n < LAYERS; n += 1) {
-  const edge = edges[n - 1] ?? 0;
-  edges[n] = Math.sqrt(-2 * portableLog(AREA / edge + density(edge)));
+function edgesOfLayers(): Float64Array {
+  const edge = new Float64Array(LAYERS + 1);
+  edge[0] = AREA / density(EDGE);
+  edge[1] = EDGE;
+  for (let n = 2; n < LAYERS; n += 1) {
+    const last = edge[n - 1] ?? 0;
+    edge[n] = Math.sqrt(-2 * portableLog(AREA / last + density(last)));
+  }
+  return edge;
 }
-for (let n = 0; n < LAYERS; n += 1) {
-  heights[n] = density(edges[n] ?? 0);
-  widths[n] = (edges[n] ?? 0) / WORD;
-  inside[n] = edges[n + 1] ?? 0;
-}
-heights[LAYERS] = 1;
 
 /** Words that `fillNormals` needs room for. */
 export function wordsForNormals(count: number): number {
@@ -66,7 +64,7 @@ function tried(state: GeneratorState, out: Float64Array, n: number, layer: numbe
   if (!(Math.abs(x) < (inside[layer] ?? 0))) retry(state, out, n, layer);
 }
 
-const spare = new Int32Array(4);
+const spare = /* @__PURE__ */ new Int32Array(4);
 
 function spareUniform(state: GeneratorState): number {
   fillWords(state, spare, 2);
