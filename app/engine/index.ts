@@ -78,6 +78,7 @@ export type { StackFilm, StackInput } from "./stack/model.ts";
 export { estimateStack, type StackEstimate } from "./stack/estimate-stack.ts";
 export { stackSupport, type StackSupport } from "./stack/stack-support.ts";
 export { curlingThickness, thicknessSweep, type SweepPoint } from "./stack/thickness-sweep.ts";
+export { warpModel, warpUncertainty } from "./stack/warp-uncertainty.ts";
 
 // Process flow
 export type { Measured } from "./measured.ts";

@@ -41,9 +41,10 @@ export interface DraftLayer {
   name: string;
   film: FilmChoice | null;
   thickness: number | null;
+  thicknessTolerance: number | null;
   thicknessSource: SourceKind;
   /** the stress that counts: this stack's own, else the film's */
-  stress: Pick<Measured, "value" | "source" | "on"> | null;
+  stress: Pick<Measured, "value" | "tolerance" | "source" | "on"> | null;
   coverage: number | null;
   /** what is unusual but not wrong */
   remarks: string[];
@@ -106,6 +107,14 @@ export function stackDraft(text: StackText, choices: StackChoices): StackDraft {
       message: "The tolerance is as large as the silicon itself.",
     });
   const layers = text.layers.map((layer, index) => readLayer(layer, index, thickness, choices.films, note));
+  layers.forEach(({ name, thickness: film, thicknessTolerance }, index) => {
+    if (film !== null && thicknessTolerance !== null && thicknessTolerance >= film)
+      faults.push({
+        field: `layers[${index}].thickness.tolerance`,
+        what: `tolerance of ${name}`,
+        message: "The tolerance is as large as the film itself.",
+      });
+  });
   return {
     silicon,
     thickness,
@@ -137,7 +146,7 @@ function readLayer(
     `thickness of ${name}`,
     readQuantity(text.thickness.value, RULES.filmThickness),
   );
-  note(
+  const thicknessTolerance = note(
     `${at}.thickness.tolerance`,
     `tolerance of ${name}`,
     readQuantity(text.thickness.tolerance, toleranceRule(RULES.filmThickness)),
@@ -146,14 +155,19 @@ function readLayer(
   const coverage = note(`${at}.coverage`, `area coverage of ${name}`, readQuantity(text.coverage, RULES.coverage));
   const own = readQuantity(text.stress.value, RULES.stress);
   note(`${at}.stress.value`, `stress of ${name}`, own, true);
-  note(
+  const stressTolerance = note(
     `${at}.stress.tolerance`,
     `tolerance of ${name}`,
     readQuantity(text.stress.tolerance, toleranceRule(RULES.stress)),
     true,
   );
   const stress = own.ok
-    ? { value: own.value, source: sourceOf(text.stress.source), on: text.stress.on || null }
+    ? {
+        value: own.value,
+        tolerance: stressTolerance,
+        source: sourceOf(text.stress.source),
+        on: text.stress.on || null,
+      }
     : own.blank
       ? (film?.stress ?? null)
       : null;
@@ -162,6 +176,7 @@ function readLayer(
     name,
     film,
     thickness,
+    thicknessTolerance,
     thicknessSource: sourceOf(text.thickness.source),
     stress,
     coverage,
@@ -199,20 +214,23 @@ function requestOf(
       ...(tolerance !== null && { thickness_tolerance_m: tolerance }),
       orientation: silicon.orientation,
     },
-    films: turnFront(layers).flatMap(({ side, film, thickness: filmThickness, stress, coverage }) =>
-      film && stress && filmThickness !== null && coverage !== null
-        ? [
-            {
-              side,
-              thickness_m: filmThickness,
-              stress_Pa: stress.value,
-              youngs_modulus_Pa: film.youngsModulus,
-              poissons_ratio: film.poissonsRatio,
-              cte_per_K: film.expansion,
-              coverage,
-            },
-          ]
-        : [],
+    films: turnFront(layers).flatMap(
+      ({ side, film, thickness: filmThickness, thicknessTolerance, stress, coverage }) =>
+        film && stress && filmThickness !== null && coverage !== null
+          ? [
+              {
+                side,
+                thickness_m: filmThickness,
+                stress_Pa: stress.value,
+                youngs_modulus_Pa: film.youngsModulus,
+                poissons_ratio: film.poissonsRatio,
+                cte_per_K: film.expansion,
+                coverage,
+                ...(thicknessTolerance !== null && { thickness_tolerance_m: thicknessTolerance }),
+                ...(stress.tolerance !== null && { stress_tolerance_Pa: stress.tolerance }),
+              },
+            ]
+          : [],
     ),
   };
 }

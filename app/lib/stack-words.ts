@@ -1,9 +1,10 @@
 import { thicknessLimits } from "#app/engine/rules/required-support.ts";
 import type { SiteLimits } from "#app/engine/rules/limits.ts";
 import { formatNumber } from "#app/engine/units/format-number.ts";
-import { formatQuantity } from "#app/engine/units/format.ts";
+import { formatQuantity, formatWithUncertainty } from "#app/engine/units/format.ts";
 import type { Outcome, SupportClass } from "#app/engine/vocabulary.ts";
 import type { EstimateAnswer, EstimateRequest } from "#app/schemas/estimate.ts";
+import type { WarpSpread } from "./warp-sampling.ts";
 
 /** A request with what was answered to it. */
 export interface Estimated {
@@ -16,6 +17,13 @@ type Shape = EstimateAnswer["shape"];
 /** A bow, warp or lift: three digits in the unit that suits it. */
 export const lengthWords = (metres: number, sign = false) =>
   formatQuantity(metres, "length", { significant: 3, trim: true, sign });
+
+/** The warp with its expanded uncertainty, k = 2, where the tolerances given carry it: '343 ± 40 µm'. */
+export function warpWords({ warp_m, warp_standard_uncertainty_m, warp_linear }: Shape): string {
+  return warp_standard_uncertainty_m === null || warp_linear !== true
+    ? lengthWords(warp_m)
+    : formatWithUncertainty(warp_m, 2 * warp_standard_uncertainty_m, "length");
+}
 
 /** A thickness of silicon, in µm. */
 export const thicknessWords = (metres: number) => formatQuantity(metres, "length", { unit: "µm" });
@@ -171,4 +179,31 @@ function curlingComparison(own: number | null, other: number | null, name: strin
   const word = difference > 0 ? "thicker" : "thinner";
   const by = thicknessWords(Math.abs(difference) * 1e-6);
   return `${name} curls below ${limitWords(other)}, this stack below ${limitWords(own)}: the other limit is ${by} ${word}.`;
+}
+
+/** How the warp is spread over wafers, in sentences: mean and spread, the middle 95 %, the share beyond the limit. */
+export function spreadSentences({
+  draws,
+  inputs,
+  mean,
+  standardUncertainty,
+  interval,
+  limit,
+  beyond,
+}: WarpSpread): string[] {
+  const [low, high] = interval;
+  const drawn = formatNumber(draws, { decimals: 0 });
+  const of = inputs === 1 ? "one input that has a tolerance" : `${inputs} inputs that have a tolerance`;
+  return [
+    `${shareWords(beyond)} of the wafers warp by more than ${lengthWords(limit)}.`,
+    `Mean ${lengthWords(mean)}, standard uncertainty ${lengthWords(standardUncertainty)}; 95 % lie between ${lengthWords(low)} and ${lengthWords(high)}.`,
+    `From ${drawn} wafers drawn within ${of}; everything else counts as exact.`,
+  ];
+}
+
+/** A share with the standard error that drawing leaves it: '12.3 % ± 0.2 %'. */
+function shareWords({ probability, standardError }: WarpSpread["beyond"]): string {
+  const percent = (share: number, decimals: number) => formatNumber(100 * share, { decimals });
+  const decimals = standardError >= 0.0005 ? 1 : 2;
+  return `${percent(probability, decimals)} % (± ${percent(standardError, decimals)} % of drawing)`;
 }

@@ -14,6 +14,7 @@ function contentSecurityPolicy(nonce: string): string {
     "img-src 'self' data:",
     "font-src 'self'",
     `connect-src 'self'${development ? " ws:" : ""}`,
+    "worker-src 'self'",
     "object-src 'none'",
     "base-uri 'none'",
     "form-action 'self'",

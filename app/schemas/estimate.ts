@@ -22,6 +22,10 @@ function si(unit: UnitSymbol, range: PhysicalRange) {
     });
 }
 
+/** Half the width of an interval that holds a number of that range. */
+const halfWidth = (unit: UnitSymbol, { least, most }: PhysicalRange) =>
+  si(unit, { least: 0, most: most - least, words: "zero to the width of the range" });
+
 const required = (expected: string) => ({
   error: ({ input }: { input?: unknown }) =>
     input === undefined ? `is missing: ${expected}` : `has to be ${expected}`,
@@ -52,6 +56,8 @@ const film = z.strictObject(
     cte_per_K: si("1/K", RULES.expansion.range).optional(),
     reference_temperature_K: si("K", RULES.temperature.range).optional(),
     coverage: si("1", RULES.coverage.range).optional(),
+    thickness_tolerance_m: halfWidth("m", RULES.filmThickness.range).optional(),
+    stress_tolerance_Pa: halfWidth("Pa", RULES.stress.range).optional(),
   },
   object,
 );
@@ -69,7 +75,7 @@ const sweep = z.strictObject(
  * What `POST /api/v1/estimates` is asked: films on a free silicon wafer, SI units in the names. Films of a side are listed from
  * the silicon outwards. `stress_Pa` is that at the film's reference temperature on a thick wafer held flat, tension positive;
  * `cte_per_K` is needed as soon as a temperature differs from the reference, 298.15 K. `sweep` asks for the curve of warp against
- * silicon thickness, `working` for the calculations.
+ * silicon thickness, `working` for the calculations. Tolerances are half-widths; a value without one counts as exact.
  */
 export const estimateSchema = z
   .strictObject(
@@ -87,6 +93,9 @@ export const estimateSchema = z
     const { thickness_m, thickness_tolerance_m = 0 } = request.wafer;
     if (thickness_tolerance_m >= thickness_m)
       fail(["wafer", "thickness_tolerance_m"], "is as large as the silicon itself");
+    request.films.forEach(({ thickness_m: film, thickness_tolerance_m: tolerance = 0 }, index) => {
+      if (tolerance >= film) fail(["films", String(index), "thickness_tolerance_m"], "is as large as the film itself");
+    });
     if (request.sweep && request.sweep.to_m <= request.sweep.from_m)
       fail(["sweep", "to_m"], "has to be thicker than from_m");
   });
@@ -114,6 +123,10 @@ export interface EstimateAnswer {
     roll_radius_m: number | null;
     /** load over the load at which the wafer starts to roll */
     stability_ratio: number;
+    /** first order in the tolerances that were given; null when none was */
+    warp_standard_uncertainty_m: number | null;
+    /** whether the warp is close to linear over these tolerances; null when none was given */
+    warp_linear: boolean | null;
   };
   /** to lift it, at nominal minus tolerance; class null where the site has no limits for the diameter */
   support: { class: SupportClass | null; because: string };

@@ -6,7 +6,10 @@ import { recordFields } from "./record-fields.ts";
 const layer = z.object({
   side: z.enum(["front", "back"]),
   film: z.uuid("Choose a film."),
-  thickness: measured({ ...RULES.filmThickness, source: "assumed" }),
+  thickness: measured({ ...RULES.filmThickness, source: "assumed" }).refine(
+    ({ value, tolerance }) => (tolerance ?? 0) < value,
+    { path: ["tolerance"], error: "The tolerance is as large as the film itself." },
+  ),
   stress: optionalMeasured({ ...RULES.stress, source: "assumed" }),
   coverage: quantity(RULES.coverage),
 });

@@ -4,10 +4,12 @@ import { estimateStack } from "#app/engine/stack/estimate-stack.ts";
 import type { StackInput } from "#app/engine/stack/model.ts";
 import { stackSupport } from "#app/engine/stack/stack-support.ts";
 import { curlingThickness, thicknessSweep } from "#app/engine/stack/thickness-sweep.ts";
+import { warpUncertainty } from "#app/engine/stack/warp-uncertainty.ts";
 import { stackWorking } from "#app/engine/stack/working.ts";
 import { standardBow } from "#app/engine/stoney/bow.ts";
 import { ENGINE_VERSION } from "#app/engine/version.ts";
 import type { StackDraft } from "#app/lib/stack-draft.ts";
+import { stackOf } from "#app/lib/stack-of-request.ts";
 import { panelRequests, type StackPanel } from "#app/lib/stack-panel.ts";
 import type { Estimated } from "#app/lib/stack-words.ts";
 import { type EstimateAnswer, type EstimateFault, type EstimateRequest } from "#app/schemas/estimate.ts";
@@ -37,6 +39,7 @@ export function answerEstimate(request: EstimateRequest, limits: SiteLimits): Es
     const estimate = estimateStack(stack);
     const { shape, filmForce } = estimate;
     const support = stackSupport(stack, limits);
+    const uncertainty = warpUncertainty(stack);
     return {
       engine_version: ENGINE_VERSION,
       stoney: { bow_m: standardBow(estimate.stoney.sagitta) },
@@ -47,6 +50,8 @@ export function answerEstimate(request: EstimateRequest, limits: SiteLimits): Es
         warp_m: shape.warp,
         roll_radius_m: shape.rollRadius,
         stability_ratio: shape.stabilityRatio,
+        warp_standard_uncertainty_m: uncertainty?.standardUncertainty ?? null,
+        warp_linear: uncertainty?.linear ?? null,
       },
       support: support ?? { class: null, because: NO_LIMITS },
       film_force: { front_N_per_m: filmForce.front, back_N_per_m: filmForce.back },
@@ -80,29 +85,6 @@ export function stackPanel(draft: StackDraft, temperature: number | null, limits
 function estimated(request: EstimateRequest, limits: SiteLimits): Estimated | null {
   const answer = answerOrNull(request, limits);
   return answer && { request, answer };
-}
-
-/** The engine's view of a request. */
-function stackOf({ wafer, films, temperature_K }: EstimateRequest): StackInput {
-  return {
-    wafer: {
-      diameter: wafer.diameter_m,
-      orientation: wafer.orientation,
-      thickness: wafer.thickness_m,
-      thicknessTolerance: wafer.thickness_tolerance_m,
-    },
-    films: films.map((film) => ({
-      side: film.side,
-      thickness: film.thickness_m,
-      stress: film.stress_Pa,
-      youngsModulus: film.youngs_modulus_Pa,
-      poissonsRatio: film.poissons_ratio,
-      expansion: film.cte_per_K,
-      referenceTemperature: film.reference_temperature_K,
-      coverage: film.coverage,
-    })),
-    temperature: temperature_K,
-  };
 }
 
 function sweepOf(stack: StackInput, { from_m, to_m, points }: NonNullable<EstimateRequest["sweep"]>) {

@@ -16,6 +16,7 @@ import {
   ratioWords,
   temperatureWords,
   thicknessWords,
+  warpWords,
   type Estimated,
 } from "#app/lib/stack-words.ts";
 import { PanelStatus, type Status } from "./PanelStatus.tsx";
@@ -124,7 +125,7 @@ function shapeFigure({ answer: { shape } }: Estimated, at: string): PanelFigure 
     };
   return {
     label: `Warp, ${at}`,
-    value: lengthWords(shape.warp_m),
+    value: warpWords(shape),
     second: `bow ${lengthWords(shape.bow_m, true)}, device side up`,
   };
 }

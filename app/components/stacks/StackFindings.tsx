@@ -8,6 +8,7 @@ import { AssumedInputs } from "./AssumedInputs.tsx";
 import { BowModels } from "./BowModels.tsx";
 import { StackChart } from "./StackChart.tsx";
 import { StackWorkings } from "./StackWorkings.tsx";
+import { WarpSpread } from "./WarpSpread.tsx";
 
 interface Props {
   name: string;
@@ -25,6 +26,7 @@ export function StackFindings({ name, draft, panel, overlay, limits, options }: 
     <>
       <StackChart name={name} panel={panel} overlay={overlay} limits={limits} options={options} />
       <BowModels estimated={panel.room} />
+      <WarpSpread estimated={panel.room} />
       <AssumedInputs draft={draft} />
       <StackWorkings working={panel.room.answer.working} names={turnFront(draft.layers).map((layer) => layer.name)} />
     </>

@@ -15,6 +15,9 @@ export interface StackFilm {
   referenceTemperature?: number | undefined;
   /** area fraction, default 1 */
   coverage?: number | undefined;
+  /** half-widths; none: counted as exact */
+  thicknessTolerance?: number | undefined;
+  stressTolerance?: number | undefined;
 }
 
 /** Films on silicon of a given remaining thickness; films of a side are listed from the silicon outwards. */

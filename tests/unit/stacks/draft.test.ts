@@ -33,6 +33,7 @@ describe("a complete draft", () => {
           poissons_ratio: 0.35,
           cte_per_K: 42e-6,
           coverage: 0.92,
+          stress_tolerance_Pa: 3e6,
         },
         {
           side: "back",
@@ -42,6 +43,7 @@ describe("a complete draft", () => {
           poissons_ratio: 0.35,
           cte_per_K: 42e-6,
           coverage: 1,
+          stress_tolerance_Pa: 3e6,
         },
       ],
     });

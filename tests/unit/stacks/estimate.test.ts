@@ -52,6 +52,16 @@ describe("a request", () => {
       { ...GOOD, wafer: { ...WAFER, thickness_tolerance_m: 100e-6 } },
       ["/wafer/thickness_tolerance_m"],
     ],
+    [
+      "a tolerance as large as a film",
+      { ...GOOD, films: [{ ...FILM, thickness_tolerance_m: 10e-6 }] },
+      ["/films/0/thickness_tolerance_m"],
+    ],
+    [
+      "a negative tolerance",
+      { ...GOOD, films: [{ ...FILM, stress_tolerance_Pa: -1 }] },
+      ["/films/0/stress_tolerance_Pa"],
+    ],
     ["a missing stress", { ...GOOD, films: [{ ...FILM, stress_Pa: undefined }] }, ["/films/0/stress_Pa"]],
     ["films that are no list", { ...GOOD, films: {} }, ["/films"]],
     ["too many films", { ...GOOD, films: Array.from({ length: 61 }, () => FILM) }, ["/films"]],
@@ -107,7 +117,15 @@ describe("an answer", () => {
     expect(curled.shape.roll_radius_m).toBeGreaterThan(0);
     expect(Math.abs(curled.shape.bow_m)).toBeCloseTo(curled.shape.warp_m, 4);
     const flat = answerEstimate({ wafer: WAFER, films: [] }, limits);
-    expect(flat.shape).toEqual({ regime: "linear", bow_m: 0, warp_m: 0, roll_radius_m: null, stability_ratio: 0 });
+    expect(flat.shape).toEqual({
+      regime: "linear",
+      bow_m: 0,
+      warp_m: 0,
+      roll_radius_m: null,
+      stability_ratio: 0,
+      warp_standard_uncertainty_m: null,
+      warp_linear: null,
+    });
     expect(flat.curls_below_m).toBeNull();
     expect(JSON.stringify(flat)).not.toContain("-0");
   });
