@@ -201,9 +201,11 @@ export function spreadSentences({
   ];
 }
 
-/** A share with the standard error that drawing leaves it: '12.3 % ± 0.2 %'. */
+/** A share with the standard error that drawing leaves it: '12.3 % (± 0.2 % of drawing)'. */
 function shareWords({ probability, standardError }: WarpSpread["beyond"]): string {
-  const percent = (share: number, decimals: number) => formatNumber(100 * share, { decimals });
+  if (probability === 0) return "None";
+  if (probability === 1) return "All";
   const decimals = standardError >= 0.0005 ? 1 : 2;
-  return `${percent(probability, decimals)} % (± ${percent(standardError, decimals)} % of drawing)`;
+  const percent = (share: number) => formatNumber(100 * share, { decimals });
+  return `${percent(probability)} % (± ${percent(standardError)} % of drawing)`;
 }

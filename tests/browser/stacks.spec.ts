@@ -72,6 +72,19 @@ test.describe("an engineer", () => {
     await expect(row).toContainText("200");
   });
 
+  test("draws wafers within the tolerances for the share beyond a warp", async ({ page }) => {
+    await fillNew(page, nameFor("spread"));
+    const spread = page.getByRole("region", { name: "Wafers beyond a warp" });
+    await field(page, "siliconThickness.value").fill("600 um");
+    await field(page, "siliconThickness.tolerance").fill("20 um");
+    await spread.getByLabel("Largest warp").fill("12 parsecs");
+    await expect(spread.getByRole("button", { name: "Draw wafers" })).toBeDisabled();
+    await spread.getByLabel("Largest warp").fill("2 mm");
+    await spread.getByRole("button", { name: "Draw wafers" }).click();
+    await expect(spread).toContainText("None of the wafers warp by more than", { timeout: 60_000 });
+    await expect(spread).toContainText("standard uncertainty");
+  });
+
   test("sees the bow by Stoney beside the better models, and the calculations on demand", async ({ page }) => {
     await makeStack(page, "models");
     const models = page.getByRole("region", { name: "Bow by three models, 25 °C" });

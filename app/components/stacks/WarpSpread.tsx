@@ -28,7 +28,7 @@ export function WarpSpread({ estimated: { request, answer } }: { estimated: Esti
   if (!scripts) return null;
   const limit = readQuantity(typed, RULES.warpLimit);
   const key = JSON.stringify([request, typed]);
-  const tolerances = answer.shape.warp_standard_uncertainty_m !== null;
+  const why = whyNot(answer.shape);
   const ask = () => {
     if (limit.ok) start({ stack: stackOf(request), limit: limit.value }, key);
   };
@@ -43,10 +43,8 @@ export function WarpSpread({ estimated: { request, answer } }: { estimated: Esti
       <h3 id={id} className="font-semibold">
         Wafers beyond a warp
       </h3>
-      {!tolerances ? (
-        <p className="text-quiet">
-          Give the silicon or a film a tolerance, and the spread of the warp over wafers can be worked out.
-        </p>
+      {why !== null ? (
+        <p className="text-quiet">{why}</p>
       ) : (
         <>
           <div className="mt-1 flex flex-wrap items-start gap-3">
@@ -94,4 +92,12 @@ export function WarpSpread({ estimated: { request, answer } }: { estimated: Esti
       )}
     </section>
   );
+}
+
+/** Why there is nothing to draw, or null. */
+function whyNot({ regime, warp_standard_uncertainty_m }: Estimated["answer"]["shape"]): string | null {
+  if (regime === "curled") return "Free, it curls: it has an edge lift, and no warp that a tool could take.";
+  if (warp_standard_uncertainty_m === null)
+    return "Give the silicon or a film a tolerance, and the spread of the warp over wafers can be worked out.";
+  return null;
 }
