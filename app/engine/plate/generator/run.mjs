@@ -1,0 +1,37 @@
+/**
+ * `npm run plate-table`: solves the free plate in full, fits the tables of the engine to it, solves several hundred shapes
+ * between the tables' points with a finer basis, prints the errors and stores both. About ten minutes on one core.
+ * The files that it writes are part of the project; nothing of the engine imports the generator.
+ */
+import { writeFileSync } from "node:fs";
+import { fileURLToPath } from "node:url";
+import { GENERATOR } from "./build-table.ts";
+import { convergence } from "./convergence.ts";
+import { makeIsotropicTable, makeSiliconTables } from "./make-tables.ts";
+import { offGridPoints, OFF_GRID_PLAN } from "./off-grid.ts";
+import { fixtureOf, pointsOf } from "./off-grid-fixture.ts";
+import { errorsText, tableText } from "./table-text.ts";
+
+const inTable = (name) => fileURLToPath(new URL(`../table/${name}`, import.meta.url));
+const fixture = fileURLToPath(new URL("../../../../fixtures/plate-shapes.json", import.meta.url));
+const say = (line) => process.stdout.write(`${line}\n`);
+
+say("Convergence, ν = 0.28: degree, critical load, bow and centre curvature across the roll at 5 and 20 times that");
+for (const row of convergence()) say(row.map((value) => String(value).padStart(10)).join(""));
+
+const isotropic = makeIsotropicTable((done) => say(`isotropic plates: ${done}`));
+writeFileSync(inTable("isotropic.ts"), tableText("ISOTROPIC", "Shapes of isotropic free plates, ν from 0 to 0.5.", isotropic));
+const silicon = makeSiliconTables((done) => say(`silicon (001): ${done}`));
+const about = "Shapes of free wafers of silicon (001), rolled about <100> (soft) and about <110> (hard).";
+writeFileSync(inTable("silicon-100.ts"), tableText("SILICON_100", about, silicon));
+
+const points = offGridPoints(OFF_GRID_PLAN, (done, total) => {
+  if (done % 25 === 0) say(`shapes between the points of the tables: ${done} of ${total}`);
+});
+writeFileSync(fixture, fixtureOf(points));
+// Only now, so that the check reads the tables just written, at the fixture's own precision.
+const { errorsByMaterial, onsetErrors } = await import("./check.ts");
+const errors = errorsByMaterial(pointsOf(fixtureOf(points)));
+const onset = onsetErrors(20);
+writeFileSync(inTable("errors.ts"), errorsText(GENERATOR, errors, onset));
+say(JSON.stringify({ onset, ...errors }, null, 2));
