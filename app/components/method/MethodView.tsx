@@ -1,11 +1,16 @@
 import { Cautions } from "#app/components/cautions/Cautions.tsx";
 import { noBreak } from "#app/components/drawings/no-break.ts";
 import type { Equation } from "#app/engine/equations.ts";
+import { CHUCK } from "#app/engine/equations/chuck.ts";
+import { DIE } from "#app/engine/equations/die.ts";
+import { DIRECTIONAL } from "#app/engine/equations/directional.ts";
+import { GRAVITY } from "#app/engine/equations/gravity.ts";
 import { HANDLING } from "#app/engine/equations/handling.ts";
 import { LAMINATE } from "#app/engine/equations/laminate.ts";
 import { METROLOGY } from "#app/engine/equations/metrology.ts";
 import { PLATE } from "#app/engine/equations/plate.ts";
 import { SILICON } from "#app/engine/equations/silicon.ts";
+import { STRENGTH } from "#app/engine/equations/strength.ts";
 import { THIN_FILM } from "#app/engine/equations/thin-film.ts";
 import { Bibliography } from "./Bibliography.tsx";
 import { EquationEntry } from "./EquationEntry.tsx";
@@ -18,7 +23,12 @@ const GROUPS: readonly { id: string; title: string; equations: Record<string, Eq
   { id: "thin-film", title: "Thin film on a thick wafer", equations: THIN_FILM },
   { id: "silicon", title: "Silicon", equations: SILICON },
   { id: "laminate", title: "Stack of layers", equations: LAMINATE },
+  { id: "directional", title: "Films and silicon that differ by direction", equations: DIRECTIONAL },
   { id: "plate", title: "Shape of a free wafer", equations: PLATE },
+  { id: "gravity", title: "Sag under its own weight", equations: GRAVITY },
+  { id: "chuck", title: "Held flat on a chuck", equations: CHUCK },
+  { id: "strength", title: "Strength", equations: STRENGTH },
+  { id: "die", title: "Die after dicing, thickness budget", equations: DIE },
   { id: "metrology", title: "Scans and uncertainty", equations: METROLOGY },
   { id: "handling", title: "Handling", equations: HANDLING },
 ];
