@@ -59,7 +59,9 @@ export { criticalFilmForceWorking, freeWaferShapeWorking } from "./plate/working
 
 // Scans and uncertainty
 export type { ProfilePoint } from "./profile/points.ts";
+export { commonPoints, type ScanPair } from "./profile/common-points.ts";
 export { fitProfile, type FitOptions, type ProfileFit } from "./profile/fit-profile.ts";
+export { fittedHeight, levelHeight } from "./profile/fitted-height.ts";
 export {
   filmStressFromCurvature,
   filmStressFromProfiles,
@@ -88,3 +90,47 @@ export { answerSentences, supportSpans } from "./flow/answer.ts";
 export type { Figure, Finding, FindingLimit, Rule, RuleContext } from "./rules/finding.ts";
 export { defaultLimits, LIMIT_DEFINITIONS, type LimitKey, type SiteLimits } from "./rules/limits.ts";
 export { RULES } from "./rules/rules.ts";
+
+// Directional stack and patterned films
+export type { DirectionalFilm, DirectionalLayer, DirectionalSilicon } from "./directional/layer.ts";
+export type { PlaneStiffness, PlaneTensor, SiliconDirection } from "./directional/plane-stiffness.ts";
+export { solveDirectionalLaminate, type DirectionalLaminateResult } from "./directional/solve-directional-laminate.ts";
+export { directionalLaminateWorking, type SurfacePart } from "./directional/working.ts";
+export type { FilmPattern } from "./patterned/pattern.ts";
+export { patternedFilm, type PatternedFilm, type PatternedFilmInput } from "./patterned/patterned-film.ts";
+export { directionalStoneyCurvature } from "./patterned/directional-stoney.ts";
+export { directionalStoneyWorking, edgeReliefWorking, patternedFilmWorking } from "./patterned/working.ts";
+
+// Own weight, chuck, strength, thickness, die
+export { gravitySag, STANDARD_GRAVITY, type GravitySag, type GravitySagInput } from "./gravity/gravity-sag.ts";
+export { siliconSagConstants } from "./gravity/silicon-sag-constants.ts";
+export type { Support } from "./gravity/support.ts";
+export { gravitySagWorking, largeSagWorking } from "./gravity/working.ts";
+export { chuckFlattening, type ChuckFlattening, type ChuckFlatteningInput } from "./chuck/chuck-flattening.ts";
+export { flatChuckStress, type FlatChuckStress } from "./chuck/flat-chuck-stress.ts";
+export {
+  chuckPressureWorking,
+  chuckRimLiftWorking,
+  chuckSurfaceStressWorking,
+  flatChuckStressWorking,
+} from "./chuck/working.ts";
+export { bendingStress, minimumBendRadius, type BendDirection } from "./strength/bending.ts";
+export { designStress, type DesignStress, type EdgeState } from "./strength/design-stress.ts";
+export { STRENGTH_DATA, type Finish, type StrengthDatum } from "./strength/strength-data.ts";
+export { failureProbability, scaledStrength, type WeibullStrength } from "./strength/weibull.ts";
+export {
+  bendingStressWorking,
+  failureProbabilityWorking,
+  minimumBendRadiusWorking,
+  scaledStrengthWorking,
+} from "./strength/working.ts";
+export { bumpCover } from "./thickness-budget/bump-cover.ts";
+export {
+  thicknessBudget,
+  type ThicknessBudget,
+  type ThicknessBudgetInput,
+  type ThicknessContribution,
+} from "./thickness-budget/thickness-budget.ts";
+export { bumpCoverWorking, thicknessBudgetWorking } from "./thickness-budget/working.ts";
+export { dieAfterDicing, type DieAfterDicing, type DieAtTemperature, type DieInput } from "./die/die-after-dicing.ts";
+export { dieWarpWorking } from "./die/working.ts";

@@ -27,4 +27,7 @@ export function formatBare(value: number, dimension: Dimension, unit: string): s
   return withoutUnit(formatQuantity(value, dimension, { unit }));
 }
 
-const withoutUnit = (text: string) => text.replace(/\u00A0[^\u00A0]*$/, "");
+/** A formatted quantity without the unit that a column's head names. */
+export function withoutUnit(text: string): string {
+  return text.replace(/\u00A0[^\u00A0]*$/, "");
+}

@@ -11,6 +11,9 @@ export interface ListParams {
 
 export const PAGE_SIZE = 25;
 
+/** Text of an address for the database, which knows no NUL. */
+const plain = (text: string | null) => (text ?? "").replaceAll("\0", "").trim().slice(0, 100);
+
 /** Reads a list's parameters; anything not understood falls back to the first of `sorts`, ascending, first page. */
 export function readListParams(
   search: URLSearchParams,
@@ -25,11 +28,11 @@ export function readListParams(
   const known = sorts.includes(name);
   const page = Number.parseInt(search.get("page") ?? "", 10);
   return {
-    query: (search.get("q") ?? "").trim().slice(0, 100),
+    query: plain(search.get("q")),
     sort: known ? name : (sorts[0] ?? ""),
     descending: known ? asked.startsWith("-") : descending,
     page: Number.isInteger(page) && page > 0 ? Math.min(page, 100_000) : 1,
-    filters: Object.fromEntries(filters.map((key) => [key, (search.get(key) ?? "").slice(0, 100)])),
+    filters: Object.fromEntries(filters.map((key) => [key, plain(search.get(key))])),
   };
 }
 

@@ -3,7 +3,7 @@ import type { Actor, ProgramRole, SiteRole } from "./roles.ts";
 /** Things done inside one program, and who may do them there. Whoever is not listed may not. */
 export const PROGRAM_PERMISSIONS = {
   "see released sheets": ["guest", "technician", "engineer", "process owner", "shift lead", "administrator"],
-  "see the work": ["technician", "engineer", "process owner", "shift lead", "administrator"],
+  "see the work": ["technician", "engineer", "process owner", "shift lead"],
   "upload scans": ["technician", "engineer", "process owner", "shift lead"],
   "edit stacks and flows": ["engineer", "process owner"],
   "run assessments": ["engineer", "process owner"],

@@ -7,10 +7,11 @@ import type {
   ShapeWord,
   SupportClass,
 } from "#app/engine/vocabulary.ts";
-import type { StepKind } from "#app/engine/flow/model.ts";
+import type { ReleaseMethod, StepKind } from "#app/engine/flow/model.ts";
 import type { Finding } from "#app/engine/rules/finding.ts";
 import type { AssumedInput, Verdict } from "#app/engine/flow/assess.ts";
 import type { Contribution } from "#app/engine/flow/uncertainty.ts";
+import type { Working } from "#app/engine/working.ts";
 
 /** How a wafer or pair lies at one temperature. `bow` is the standard one; SI. */
 export interface ShapeResult {
@@ -22,6 +23,8 @@ export interface ShapeResult {
   stabilityRatio: number;
   rollRadius: number | null;
   standardUncertainty: number | null;
+  /** how its bow was computed; null for a wafer let go that nothing held */
+  working: Working | null;
 }
 
 /** One step of a stored assessment, complete for screens and sheets. SI. */
@@ -36,6 +39,8 @@ export interface StepResult {
   siliconBefore: number;
   silicon: number;
   siliconLeast: number;
+  /** half-width of the interval of `silicon`; null when nobody gave one */
+  siliconTolerance: number | null;
   planned: Holding;
   /** what that is by name: the carrier, else the holding itself */
   plannedName: string;
@@ -61,7 +66,9 @@ export interface BondResult {
   material: string;
   thickness: number;
   temperatureLimit: number;
-  release: string;
+  /** from where on it flows, K; null for a material that does not */
+  flowsFrom: number | null;
+  release: ReleaseMethod;
 }
 
 /** An assessment's results as they are stored, for ever. */
@@ -72,5 +79,9 @@ export interface AssessmentResult {
   steps: StepResult[];
   findings: Finding[];
   assumed: AssumedInput[];
+  /** how many inputs there are, assumed ones included */
+  inputs: number;
   bonds: BondResult[];
+  /** highest temperature on tape or film frame that the site allowed, K */
+  tapeTemperature: number;
 }

@@ -2,7 +2,10 @@ import { z } from "zod";
 import { CARRIER_MATERIALS } from "#app/engine/flow/model.ts";
 import { measured, optionalMeasured, quantity } from "./quantity.ts";
 import { RULES } from "./ranges.ts";
-import { recordFields } from "./record-fields.ts";
+import { checkbox, line, recordFields, wholeNumber } from "./record-fields.ts";
+
+/** What stands in place of a temperature range when the carrier follows silicon's own curve. */
+const OWN_CURVE = "silicon's own curve";
 
 const limit = {
   ...RULES.temperature,
@@ -19,35 +22,27 @@ export const carrierSchema = z
     youngsModulus: measured(RULES.modulus),
     poissonsRatio: measured(RULES.poissonsRatio),
     expansion: optionalMeasured(RULES.expansion),
-    expansionRange: z
-      .string()
-      .trim()
-      .max(100)
-      .optional()
-      .transform((text) => text ?? ""),
+    expansionRange: line(100),
     density: measured(RULES.density),
     thicknessVariation: measured(RULES.thicknessVariation),
     temperatureLimit: measured(limit),
-    passesUltraviolet: z
-      .boolean()
-      .optional()
-      .transform((checked) => checked ?? false),
-    passesInfrared: z
-      .boolean()
-      .optional()
-      .transform((checked) => checked ?? false),
-    perforated: z
-      .boolean()
-      .optional()
-      .transform((checked) => checked ?? false),
-    reuseLimit: z.number("Type how often it may be used.").int("Type a whole number.").min(1).max(10_000),
+    passesUltraviolet: checkbox,
+    passesInfrared: checkbox,
+    perforated: checkbox,
+    reuseLimit: wholeNumber("Type how often it may be used, as a whole number.", { least: 1, most: 10_000 }),
   })
-  .superRefine(({ material, expansion }, context) => {
-    if (material === "glass" && expansion === null)
-      context.addIssue({
-        code: "custom",
-        path: ["expansion", "value"],
-        message: "Type the expansion of the glass. Only silicon has its own curve here.",
-      });
-  });
+  .superRefine(({ material, expansion, expansionRange, passesUltraviolet }, context) => {
+    const fail = (path: string[], message: string) => context.addIssue({ code: "custom", path, message });
+    if (material === "glass") {
+      if (expansion === null)
+        fail(["expansion", "value"], "Type the expansion of the glass. Only silicon has its own curve here.");
+      else if (expansionRange === "")
+        fail(["expansionRange"], "Say over which temperatures the expansion is a mean, such as 25 to 150 °C.");
+      return;
+    }
+    if (expansion !== null)
+      fail(["expansion", "value"], "Leave it blank: a silicon carrier follows the curve of silicon itself.");
+    if (passesUltraviolet) fail(["passesUltraviolet"], "Silicon does not pass ultraviolet light.");
+  })
+  .transform((carrier) => (carrier.expansion === null ? { ...carrier, expansionRange: OWN_CURVE } : carrier));
 export type CarrierValues = z.output<typeof carrierSchema>;

@@ -1,71 +1,145 @@
 import { z } from "zod";
 import { STEP_KINDS } from "#app/engine/flow/model.ts";
+import type { Measured } from "#app/engine/measured.ts";
 import { EXPOSURES, HOLDINGS } from "#app/engine/vocabulary.ts";
+import { inputsOf } from "#app/lib/flow-step-kinds.ts";
 import { measured, optionalMeasured, optionalQuantity, quantity } from "./quantity.ts";
 import { RULES } from "./ranges.ts";
 import { recordFields } from "./record-fields.ts";
 
-export const flowSchema = z.object({
+const SPREAD = "The tolerance is as large as the thickness itself.";
+
+/** A thickness whose tolerance reaches zero says that there may be none of it. */
+const reachesZero = (thickness: Measured | null | undefined) =>
+  typeof thickness?.tolerance === "number" && thickness.tolerance >= thickness.value;
+
+const identifier = z
+  .union([z.uuid(), z.literal("")], "Choose one of the list.")
+  .optional()
+  .transform((id) => id || null);
+
+const flowFields = {
   ...recordFields,
   program: z.uuid("Choose a program."),
   silicon: z.uuid("Choose the silicon."),
   incomingThickness: measured({ ...RULES.siliconThickness, source: "supplier" }),
-});
+};
+
+function checkIncoming({ incomingThickness }: { incomingThickness: Measured }, context: z.core.$RefinementCtx): void {
+  if (reachesZero(incomingThickness))
+    context.addIssue({ code: "custom", path: ["incomingThickness", "tolerance"], message: SPREAD });
+}
+
+/** The head of a flow. */
+export const flowSchema = z.object(flowFields).superRefine(checkIncoming);
 export type FlowValues = z.output<typeof flowSchema>;
 
+/** A new flow, which may start from the steps proposed for a stack, on a carrier where those need one. */
+export const newFlowSchema = z
+  .object({ ...flowFields, stack: identifier, carrier: identifier, bondingMaterial: identifier })
+  .superRefine(checkIncoming);
+export type NewFlowValues = z.output<typeof newFlowSchema>;
+
 const filmChange = z.object({
-  change: z.enum(["adds", "removes"]),
-  side: z.enum(["front", "back"]),
+  change: z.enum(["adds", "removes"], "Choose whether the step adds or removes it."),
+  side: z.enum(["front", "back"], "Choose the side."),
   film: z.uuid("Choose a film."),
   thickness: optionalMeasured({ ...RULES.filmThickness, source: "assumed" }),
   stress: optionalMeasured({ ...RULES.stress, source: "assumed" }),
   coverage: optionalQuantity(RULES.coverage),
 });
 
-const identifier = z
-  .union([z.uuid(), z.literal("")])
-  .optional()
-  .transform((id) => id || null);
+/** Fields of a step, each by itself. */
+const stepFields = z.object({
+  title: z.string("Say what is done.").trim().min(1, "Say what is done.").max(120, "Keep it under 120 characters."),
+  kind: z.enum(STEP_KINDS, "Choose the kind of step."),
+  peakTemperature: quantity({ ...RULES.temperature, label: "peak temperature" }),
+  holdTime: optionalQuantity(RULES.holdTime),
+  equipment: identifier,
+  exposures: z
+    .array(z.enum(EXPOSURES))
+    .optional()
+    .transform((list) => list ?? []),
+  planned: z.enum(HOLDINGS, "Choose what holds the wafer."),
+  siliconAfter: optionalMeasured({ ...RULES.siliconThickness, label: "silicon after the step", source: "assumed" }),
+  trimWidth: optionalMeasured({ ...RULES.trimWidth, source: "assumed" }),
+  trimDepth: optionalMeasured({ ...RULES.trimDepth, source: "assumed" }),
+  carrier: identifier,
+  bondingMaterial: identifier,
+  bondThickness: optionalMeasured({ ...RULES.bondThickness, source: "assumed" }),
+  groundFaceForce: optionalMeasured({ ...RULES.faceForce, source: "assumed" }),
+  films: z
+    .array(filmChange)
+    .max(20, "A step changes at most 20 films.")
+    .optional()
+    .transform((list) => list ?? []),
+});
+export type StepValues = z.output<typeof stepFields>;
 
-export const stepSchema = z
-  .object({
-    title: z.string("Say what is done.").trim().min(1, "Say what is done.").max(120, "Keep it under 120 characters."),
-    kind: z.enum(STEP_KINDS, "Choose the kind of step."),
-    peakTemperature: quantity({ ...RULES.temperature, label: "peak temperature" }),
-    holdTime: optionalQuantity(RULES.holdTime),
-    equipment: identifier,
-    exposures: z
-      .array(z.enum(EXPOSURES))
-      .optional()
-      .transform((list) => list ?? []),
-    planned: z.enum(HOLDINGS, "Choose what holds the wafer."),
-    siliconAfter: optionalMeasured({ ...RULES.siliconThickness, label: "silicon after the step", source: "assumed" }),
-    trimWidth: optionalMeasured({ ...RULES.trimWidth, source: "assumed" }),
-    trimDepth: optionalMeasured({ ...RULES.trimDepth, source: "assumed" }),
-    carrier: identifier,
-    bondingMaterial: identifier,
-    bondThickness: optionalMeasured({ ...RULES.bondThickness, source: "assumed" }),
-    groundFaceForce: optionalMeasured({ ...RULES.faceForce, source: "assumed" }),
-    films: z
-      .array(filmChange)
-      .max(20, "A step changes at most 20 films.")
-      .optional()
-      .transform((list) => list ?? []),
-  })
-  .superRefine((step, context) => {
-    const fail = (path: (string | number)[], message: string) => context.addIssue({ code: "custom", path, message });
-    if (step.kind === "bond") {
-      if (!step.carrier) fail(["carrier"], "Choose the carrier that it is bonded to.");
-      if (!step.bondingMaterial) fail(["bondingMaterial"], "Choose the bonding material.");
-      if (!step.bondThickness) fail(["bondThickness", "value"], "Type the thickness of the bond.");
-    }
-    if (step.kind === "grind" && !step.siliconAfter)
-      fail(["siliconAfter", "value"], "Type the silicon that remains after the grind.");
-    if (step.kind === "edge trim" && !(step.trimWidth && step.trimDepth))
-      fail([step.trimWidth ? "trimDepth" : "trimWidth", "value"], "Type the width and the depth of the trim.");
-    step.films.forEach((film, index) => {
-      if (film.change === "adds" && !film.thickness)
-        fail(["films", index, "thickness", "value"], "Type the film thickness. Blank is missing, not zero.");
-    });
-  });
-export type StepValues = z.output<typeof stepSchema>;
+/** A step some of whose fields may not have been understood. */
+type Partly<Values> = { [Field in keyof Values]?: Values[Field] | undefined };
+type Fail = (path: (string | number)[], message: string) => void;
+
+/** What the kind of step asks for, and what it has no use for: that must not lie in wait unseen. */
+function checkKind(step: Partly<StepValues>, fail: Fail): void {
+  if (!step.kind) return;
+  const has = inputsOf(step.kind);
+  if (has.bond) {
+    if (!step.carrier) fail(["carrier"], "Choose the carrier that it is bonded to.");
+    if (!step.bondingMaterial) fail(["bondingMaterial"], "Choose the bonding material.");
+    if (!step.bondThickness) fail(["bondThickness", "value"], "Type the thickness of the bond.");
+  } else {
+    const only = "Only a bond has it: leave it blank, or choose the kind ‘bond’.";
+    if (step.carrier) fail(["carrier"], only);
+    if (step.bondingMaterial) fail(["bondingMaterial"], only);
+    if (step.bondThickness) fail(["bondThickness", "value"], only);
+  }
+  if (has.trim) {
+    if (!step.trimWidth) fail(["trimWidth", "value"], "Type how wide the trim is.");
+    if (!step.trimDepth) fail(["trimDepth", "value"], "Type how deep the trim goes.");
+  } else {
+    const only = "Only an edge trim has it: leave it blank, or choose the kind ‘edge trim’.";
+    if (step.trimWidth) fail(["trimWidth", "value"], only);
+    if (step.trimDepth) fail(["trimDepth", "value"], only);
+  }
+  if (!has.groundFace && step.groundFaceForce)
+    fail(["groundFaceForce", "value"], "Only a grind, stress relief, polish or via reveal changes it: leave it blank.");
+  if (step.kind === "grind" && !step.siliconAfter)
+    fail(["siliconAfter", "value"], "Type the silicon that remains after the grind.");
+}
+
+function checkFilm({ change, thickness, stress, coverage }: Partly<StepValues["films"][number]>, fail: Fail): void {
+  if (change === "adds") {
+    if (thickness === null) fail(["thickness", "value"], "Type the film thickness. Blank is missing, not zero.");
+    if (reachesZero(thickness)) fail(["thickness", "tolerance"], SPREAD);
+  }
+  if (change !== "removes") return;
+  const whole = "A removal takes the whole film: leave this blank.";
+  if (thickness) fail(["thickness", "value"], whole);
+  if (stress) fail(["stress", "value"], whole);
+  if (typeof coverage === "number") fail(["coverage"], whole);
+}
+
+/** Looks at the fields together. A field that has been spoken of already is not spoken of again. */
+function checkStep(step: Partly<StepValues>, context: z.core.$RefinementCtx): void {
+  const spokenOf = context.issues.map(({ path }) => `${path?.join(".")}.`);
+  const fail: Fail = (path, message) => {
+    const field = path.filter((part) => part !== "value" && part !== "tolerance").join(".");
+    if (spokenOf.some((known) => known.startsWith(`${field}.`))) return;
+    context.addIssue({ code: "custom", path, message });
+  };
+  checkKind(step, fail);
+  for (const field of ["siliconAfter", "trimWidth", "trimDepth", "bondThickness"] as const)
+    if (reachesZero(step[field])) fail([field, "tolerance"], SPREAD.replace("thickness", "value"));
+  if (!Array.isArray(step.films)) return;
+  for (const [index, film] of step.films.entries())
+    if (typeof film === "object") checkFilm(film, (path, message) => fail(["films", index, ...path], message));
+}
+
+/**
+ * A step of a flow. Everything that is wrong is said at once, so the step as a whole is looked at even when a field of it was not
+ * understood. Whether the order of steps makes sense is not asked here: the order rule says so in the assessment.
+ */
+export const stepSchema = stepFields.superRefine(checkStep, {
+  when: ({ value }) => typeof value === "object" && value !== null,
+});

@@ -1,42 +1,11 @@
 import { z } from "zod";
 import type { Measured } from "#app/engine/measured.ts";
 import type { Dimension } from "#app/engine/units/dimensions.ts";
-import { parseQuantity } from "#app/engine/units/parse-quantity.ts";
 import { SOURCE_KINDS, type SourceKind } from "#app/engine/vocabulary.ts";
-
-/** A range of the trade: outside it a value is refused as a slip of the keyboard, not judged. */
-export interface PhysicalRange {
-  /** SI, inclusive */
-  least: number;
-  most: number;
-  /** the same in words: '1 nm to 10 mm' */
-  words: string;
-}
-
-export interface QuantityRule {
-  /** how the field is called in a sentence: 'thickness' */
-  label: string;
-  dimension: Dimension;
-  range: PhysicalRange;
-}
+import { readQuantity, toleranceRule, type QuantityRule } from "#app/lib/read-quantity.ts";
 
 /** What a form sends for a quantity: text with its unit. */
 const text = z.string().trim().max(60, "That is too long for a quantity.").optional();
-
-/** Reads one quantity; says in one sentence what is wrong with it. */
-export function readQuantity(
-  typed: string | undefined,
-  { label, dimension, range }: QuantityRule,
-): { ok: true; value: number } | { ok: false; blank: boolean; message: string } {
-  const parsed = parseQuantity(typed ?? "", dimension);
-  if (!parsed.ok)
-    return parsed.code === "blank"
-      ? { ok: false, blank: true, message: `Type the ${label}. Blank is missing, not zero.` }
-      : { ok: false, blank: false, message: parsed.message };
-  if (parsed.value < range.least || parsed.value > range.most)
-    return { ok: false, blank: false, message: `${parsed.understood} is outside ${range.words}.` };
-  return { ok: true, value: parsed.value };
-}
 
 /** A quantity that must be given, as its SI value. */
 export function quantity(rule: QuantityRule) {
@@ -80,12 +49,7 @@ function toMeasured(
   context: z.core.$RefinementCtx,
 ): Measured | null {
   const value = readQuantity(fields.value, rule);
-  const span = rule.range.most - rule.range.least;
-  const tolerance = readQuantity(fields.tolerance, {
-    label: "tolerance",
-    dimension: rule.toleranceDimension ?? rule.dimension,
-    range: { least: 0, most: span, words: "zero to the width of the range" },
-  });
+  const tolerance = readQuantity(fields.tolerance, toleranceRule(rule, rule.toleranceDimension));
   const fail = (field: string, message: string) => {
     context.addIssue({ code: "custom", path: [field], message });
     return null;
@@ -119,10 +83,19 @@ export function measured(rule: MeasuredRule) {
   });
 }
 
-/** A property that may be left blank. */
+/** A property that may be left blank, but not its value alone: what was typed beside it would be lost. */
 export function optionalMeasured(rule: MeasuredRule) {
   return measuredShape
-    .transform((fields, context): Measured | null => toMeasured(fields, rule, context))
+    .transform((fields, context): Measured | null => {
+      const result = toMeasured(fields, rule, context);
+      if (!fields.value?.trim() && (fields.tolerance?.trim() || fields.note))
+        context.addIssue({
+          code: "custom",
+          path: ["value"],
+          message: `Type the ${rule.label} as well, or clear its tolerance and note.`,
+        });
+      return result;
+    })
     .optional()
     .transform((value) => value ?? null);
 }

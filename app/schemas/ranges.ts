@@ -1,4 +1,4 @@
-import type { QuantityRule } from "./quantity.ts";
+import type { QuantityRule } from "#app/lib/read-quantity.ts";
 
 /**
  * The quantities that people type, with the widest range that makes sense of each: beyond it the value is a slip. Ranges of the

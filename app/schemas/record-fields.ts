@@ -1,19 +1,26 @@
 import { z } from "zod";
 
+/** A line of text that may be left blank. */
+export const line = (most: number) =>
+  z
+    .string()
+    .trim()
+    .max(most, `Keep it under ${most} characters.`)
+    .optional()
+    .transform((text) => text ?? "");
+
 /** Fields that every record's form shares. */
 export const recordFields = {
   name: z.string("Give it a name.").trim().min(1, "Give it a name.").max(120, "Keep the name under 120 characters."),
-  note: z
-    .string()
-    .trim()
-    .max(1000, "Keep the note under 1000 characters.")
-    .optional()
-    .transform((text) => text ?? ""),
+  note: line(1000),
 };
 
-/** The version that a form was filled from; missing for a new record. */
-export const versionField = z.coerce.number().int().optional();
+/** A box to tick; one that is not ticked is not sent at all. */
+export const checkbox = z
+  .boolean()
+  .optional()
+  .transform((checked) => checked ?? false);
 
-/** A whole number that may be missing. */
-export const optionalCount = (most: number) =>
-  z.number("Type a whole number.").int("Type a whole number.").min(0).max(most).optional();
+/** A whole number from `least` to `most`; `message` says what to type instead of anything else. */
+export const wholeNumber = (message: string, { least, most }: { least: number; most: number }) =>
+  z.number(message).int(message).min(least, `It must be ${least} or more.`).max(most, `It must be ${most} or less.`);

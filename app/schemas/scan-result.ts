@@ -1,4 +1,4 @@
-import type { LengthUnit } from "./scan.ts";
+import type { DecimalMark, LengthUnit } from "#app/lib/scan-file.ts";
 
 /** What a scan was computed with, SI where it is a quantity. */
 export interface ScanParameters {
@@ -11,7 +11,7 @@ export interface ScanParameters {
   edgeExclusion: number;
   positionUnit: LengthUnit;
   heightUnit: LengthUnit;
-  decimalMark: "point" | "comma";
+  decimalMark: DecimalMark;
 }
 
 /** A row of a file that could not be used: counted from 1 as an editor shows it, with what stood there. */
@@ -23,30 +23,60 @@ export interface SkippedRow {
 
 /** How one file was read. */
 export interface FileReading {
+  /** rows of data, used or not */
   rows: number;
   used: number;
+  /** columns that a row has; the first two are read */
+  columns: number;
   heading: string | null;
   delimiter: string;
+  /** least and greatest position, m */
+  from: number;
+  to: number;
   skipped: SkippedRow[];
   skippedInAll: number;
 }
 
-/** What came out, SI; `bowChange` is the standard bow over the wafer's diameter. */
+/** Share of one input in the uncertainty of the stress. `given` is false where nobody stated a tolerance. */
+export interface ScanContribution {
+  input: string;
+  /** standard uncertainty that it gives the stress, Pa */
+  contribution: number;
+  given: boolean;
+}
+
+/** What came out, SI; every uncertainty is a standard one. `bowChange` is the standard bow over the wafer's diameter. */
 export interface ScanResult {
+  biaxialModulus: number;
+  curvatureBefore: number;
+  curvatureAfter: number;
   curvatureChange: number;
   curvatureUncertainty: number;
   bowChange: number;
   bowUncertainty: number;
+  /** after the film, when it can be no bowl any more: then there is no bow */
+  curled: { rollRadius: number; edgeLift: number } | null;
+  /** share by which the small-deflection relation understates the stress; null when curled */
+  understatedBy: number | null;
   stress: number;
   stressUncertainty: number;
-  budget: { input: string; share: number }[];
+  budget: ScanContribution[];
+  /** left over after the fit, root mean square, m */
   rms: number;
   quartic: number;
   steep: boolean;
+  /** stretch that both scans cover, m as in the files */
+  from: number;
+  to: number;
   used: number;
+  /** points off the parabola that the fit left out, and the positions of the first of them, m from the middle of the scan */
   rejected: number;
+  rejectedAt: number[];
   before: FileReading;
   after: FileReading;
-  /** thinned for drawing: position and heights, m; the fitted parabola of the difference */
+  /**
+   * thinned for drawing: position from the middle of the scan, heights after each scan was levelled, the parabola through the
+   * difference, m
+   */
   curve: { x: number; before: number; after: number; difference: number; fitted: number }[];
 }

@@ -1,15 +1,18 @@
 import { z } from "zod";
+import { DECIMAL_MARKS, LENGTH_UNITS } from "#app/lib/scan-file.ts";
 import { optionalQuantity, quantity } from "./quantity.ts";
 import { RULES } from "./ranges.ts";
 
-export const LENGTH_UNITS = ["m", "mm", "µm", "nm"] as const;
-export type LengthUnit = (typeof LENGTH_UNITS)[number];
-
 export const scanSchema = z.object({
-  program: z.uuid("Choose a program."),
-  label: z.string("Name the wafer.").trim().min(1, "Name the wafer, for example M-0388.").max(80),
+  program: z.uuid("Choose the program."),
+  label: z
+    .string("Name the wafer, for example M-0388.")
+    .trim()
+    .min(1, "Name the wafer, for example M-0388.")
+    .max(80, "Keep the name under 80 characters.")
+    .regex(/^\P{Cc}*$/u, "The name holds a character that cannot be shown. Type it anew."),
   film: z
-    .union([z.uuid(), z.literal("")])
+    .union([z.uuid(), z.literal("")], "Choose a film from the list.")
     .optional()
     .transform((id) => id || null),
   orientation: z.enum(["100", "111"], "Choose the orientation."),
@@ -27,6 +30,6 @@ export const scanSchema = z.object({
   edgeExclusion: quantity(RULES.rim),
   positionUnit: z.enum(LENGTH_UNITS, "Choose the unit of the position."),
   heightUnit: z.enum(LENGTH_UNITS, "Choose the unit of the height."),
-  decimalMark: z.enum(["point", "comma"], "Choose the decimal mark."),
+  decimalMark: z.enum(DECIMAL_MARKS, "Choose the decimal mark."),
 });
 export type ScanValues = z.output<typeof scanSchema>;

@@ -11,12 +11,15 @@ const layer = z.object({
   coverage: quantity(RULES.coverage),
 });
 
+/** Films are listed top to bottom as the cut shows them, device side up. */
 export const stackSchema = z.object({
   ...recordFields,
   program: z.uuid("Choose a program."),
   silicon: z.uuid("Choose the silicon."),
-  siliconThickness: measured({ ...RULES.siliconThickness, source: "assumed" }),
+  siliconThickness: measured({ ...RULES.siliconThickness, source: "assumed" }).refine(
+    ({ value, tolerance }) => (tolerance ?? 0) < value,
+    { path: ["tolerance"], error: "The tolerance is as large as the silicon itself." },
+  ),
   layers: z.array(layer).max(60, "A stack holds at most 60 films."),
 });
 export type StackValues = z.output<typeof stackSchema>;
-export type StackFormValues = z.input<typeof stackSchema>;

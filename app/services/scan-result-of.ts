@@ -1,14 +1,17 @@
-import { filmStressFromProfiles } from "#app/engine/profile/film-stress.ts";
+import { filmStressFromProfiles, type FilmStressFromProfiles } from "#app/engine/profile/film-stress.ts";
+import { fittedHeight, levelHeight } from "#app/engine/profile/fitted-height.ts";
+import { smallDeflection } from "#app/engine/profile/small-deflection.ts";
 import { siliconBiaxialModulus } from "#app/engine/silicon/biaxial-modulus.ts";
 import { bowFromCurvature, standardBow } from "#app/engine/stoney/bow.ts";
 import type { ReadProfile } from "#app/lib/profile-csv.ts";
-import type { ScanResult } from "#app/schemas/scan-result.ts";
+import type { ScanContribution, ScanResult } from "#app/schemas/scan-result.ts";
 import type { ScanValues } from "#app/schemas/scan.ts";
 
 /** Relative standard uncertainty of silicon's biaxial modulus (common practice, no source: 0.5 to 1 %). */
 const MODULUS_UNCERTAINTY = 0.01;
 /** Points that a plot of this width can show. */
 const DRAWN_POINTS = 400;
+const SHOWN_POSITIONS = 12;
 
 /** Standard uncertainty of a stated interval: rectangular, JCGM 100:2008 4.3.7. */
 const fromTolerance = (tolerance: number | null) => (tolerance ?? 0) / Math.sqrt(3);
@@ -34,62 +37,77 @@ export function scanResult(values: ScanValues, before: ReadProfile, after: ReadP
     },
   });
   const radius = values.diameter / 2;
-  const { difference, curvatureChange } = film;
+  const { difference, curvatureChange, pairs } = film;
+  const { curled, understatedBy } = smallDeflection({
+    before: film.before.curvature,
+    after: film.after.curvature,
+    radius,
+    thickness: values.siliconThickness,
+    orientation: values.orientation,
+  });
+  const [from, to] = [pairs[0]?.x ?? 0, pairs.at(-1)?.x ?? 0];
+  const middle = (from + to) / 2;
   return {
+    biaxialModulus,
+    curvatureBefore: film.before.curvature,
+    curvatureAfter: film.after.curvature,
     curvatureChange,
     curvatureUncertainty: difference.standardUncertainty,
     bowChange: standardBow(bowFromCurvature({ curvature: curvatureChange, radius })),
     bowUncertainty: Math.abs(bowFromCurvature({ curvature: difference.standardUncertainty, radius })),
+    curled: curled ? rolled(film, radius) : null,
+    understatedBy,
     stress: film.stress,
     stressUncertainty: film.standardUncertainty,
-    budget: film.budget.map(({ input, contribution }) => ({
-      input,
-      share: film.stress === 0 ? 0 : Math.abs(contribution / film.stress),
-    })),
+    budget: film.budget.map((share) => contribution(share, values)),
     rms: difference.rms,
     quartic: difference.quartic,
-    steep: difference.steep,
+    steep: difference.steep || film.before.steep || film.after.steep,
+    from,
+    to,
     used: difference.used,
     rejected: difference.rejected.length,
+    rejectedAt: difference.rejected
+      .slice(0, SHOWN_POSITIONS)
+      .flatMap((n) => pairs[n]?.x ?? [])
+      .map((x) => x - middle),
     before: before.reading,
     after: after.reading,
-    curve: drawnCurve(before.points, after.points, curvatureChange),
+    curve: drawnCurve(film, middle),
   };
 }
 
-/** Both scans and their difference on the positions of the first, levelled at the middle, thinned for drawing. */
-function drawnCurve(
-  before: ReadProfile["points"],
-  after: ReadProfile["points"],
-  curvature: number,
-): ScanResult["curve"] {
-  const second = after.toSorted((a, b) => a.x - b.x);
-  const first = before.toSorted((a, b) => a.x - b.x);
-  const [low, high] = [second[0]?.x ?? 0, second.at(-1)?.x ?? 0];
-  const common = first.filter(({ x }) => x >= low && x <= high);
-  const stride = Math.max(1, Math.ceil(common.length / DRAWN_POINTS));
-  const drawn = common.filter((_, index) => index % stride === 0);
-  const middle = ((drawn[0]?.x ?? 0) + (drawn.at(-1)?.x ?? 0)) / 2;
-  let next = 0;
-  const raw = drawn.map(({ x, z }) => {
-    while (next < second.length - 1 && (second[next]?.x ?? x) < x) next += 1;
-    const [a, b] = [second[Math.max(0, next - 1)], second[next]];
-    const z2 = !a || !b || a.x === b.x ? (b?.z ?? 0) : a.z + ((b.z - a.z) * (x - a.x)) / (b.x - a.x);
-    return { x: x - middle, before: z, after: z2, difference: z2 - z };
-  });
-  const level = levelOf(raw.map(({ x, difference }) => ({ x, z: difference - (curvature * x * x) / 2 })));
-  return raw.map((point) => ({
-    ...point,
-    fitted: level.offset + level.slope * point.x + (curvature * point.x * point.x) / 2,
-  }));
+/** A wafer that has rolled is told by the radius of its roll and by how far its edges lift, never by a bow. */
+function rolled(film: FilmStressFromProfiles, radius: number): ScanResult["curled"] {
+  const curvature = Math.max(Math.abs(film.before.curvature), Math.abs(film.after.curvature));
+  return { rollRadius: 1 / curvature, edgeLift: bowFromCurvature({ curvature, radius, exact: true }) };
 }
 
-/** Straight line through what the parabola leaves, so that the fit lies on the difference. */
-function levelOf(points: { x: number; z: number }[]): { offset: number; slope: number } {
-  const n = points.length || 1;
-  const meanX = points.reduce((sum, { x }) => sum + x, 0) / n;
-  const meanZ = points.reduce((sum, { z }) => sum + z, 0) / n;
-  const spread = points.reduce((sum, { x }) => sum + (x - meanX) ** 2, 0);
-  const slope = spread === 0 ? 0 : points.reduce((sum, { x, z }) => sum + (x - meanX) * (z - meanZ), 0) / spread;
-  return { offset: meanZ - slope * meanX, slope };
+/** The engine's input with the words of this page, and whether its uncertainty was stated. */
+function contribution(
+  share: { input: string; contribution: number },
+  { filmThicknessTolerance, siliconThicknessTolerance }: ScanValues,
+): ScanContribution {
+  switch (share.input) {
+    case "substrate thickness":
+      return { ...share, input: "silicon thickness", given: siliconThicknessTolerance !== null };
+    case "film thickness":
+      return { ...share, given: filmThicknessTolerance !== null };
+    default:
+      return { ...share, given: true };
+  }
+}
+
+/** Both scans, levelled, and their difference with its parabola, thinned for drawing. */
+function drawnCurve({ pairs, before, after, difference }: FilmStressFromProfiles, middle: number): ScanResult["curve"] {
+  const stride = Math.max(1, Math.ceil(pairs.length / DRAWN_POINTS));
+  return pairs
+    .filter((_, index) => index % stride === 0)
+    .map((pair) => ({
+      x: pair.x - middle,
+      before: pair.before - levelHeight(before, pair.x),
+      after: pair.after - levelHeight(after, pair.x),
+      difference: pair.after - pair.before - levelHeight(difference, pair.x),
+      fitted: fittedHeight(difference, pair.x) - levelHeight(difference, pair.x),
+    }));
 }

@@ -1,35 +1,28 @@
 import { randomUUID } from "node:crypto";
-import type { EntityManager } from "@mikro-orm/postgresql";
+import { raw, type EntityManager, type QueryOrderMap } from "@mikro-orm/postgresql";
+import type { StackListRow } from "#app/components/stacks/stack-columns.tsx";
 import { Film } from "#app/db/entities/film.ts";
 import { Silicon } from "#app/db/entities/silicon.ts";
 import { StackLayer } from "#app/db/entities/stack-layer.ts";
 import { Stack } from "#app/db/entities/stack.ts";
 import type { Measured } from "#app/engine/measured.ts";
-import type { StackInput } from "#app/engine/stack/model.ts";
 import type { Side } from "#app/engine/vocabulary.ts";
 import { PAGE_SIZE, type ListPage, type ListParams } from "#app/lib/list-params.ts";
-import { mayInProgram, programsWhere } from "#app/policies/permissions.ts";
+import { turnFront } from "#app/lib/stack-order.ts";
+import { mayInProgram, programsWhere, type ProgramPermission } from "#app/policies/permissions.ts";
+import type { EstimateRequest } from "#app/schemas/estimate.ts";
 import type { StackValues } from "#app/schemas/stack.ts";
-import { notFound } from "#app/server/problem.server.ts";
+import { notFound, problem } from "#app/server/problem.server.ts";
 import { inScope, type ActorScope } from "#app/server/scope.server.ts";
+import { answerOrNull } from "./estimate-answer.ts";
 import { escapeLike } from "./like.server.ts";
+import { readLimits } from "./limits.server.ts";
 import { requireInProgram } from "./permission.server.ts";
 import { programFilter } from "./program-filter.server.ts";
 import { conflictOf, newRecord, saving, stampOf, touch, type RecordStamp, type Saved } from "./record.server.ts";
 import { idFrom } from "./uuid.server.ts";
 
 export const STACK_SORTS = ["updated", "name", "program", "thickness"] as const;
-
-export interface StackRow {
-  id: string;
-  name: string;
-  program: string;
-  diameter: number;
-  thickness: number;
-  films: number;
-  updatedAt: string;
-  input: StackInput;
-}
 
 export interface StackLayerDetail {
   side: Side;
@@ -76,22 +69,22 @@ function layerDetail(layer: StackLayer): StackLayerDetail {
   };
 }
 
-/** The engine's view of a stack at 25 °C. */
-export function stackInputOf(stack: Pick<StackDetail, "silicon" | "siliconThickness" | "layers">): StackInput {
+/** What to ask for a stored stack at 25 °C. */
+function requestOf({ silicon, siliconThickness, layers }: StackDetail): EstimateRequest {
   return {
     wafer: {
-      diameter: stack.silicon.diameter,
-      orientation: stack.silicon.orientation,
-      thickness: stack.siliconThickness.value,
-      thicknessTolerance: stack.siliconThickness.tolerance ?? undefined,
+      diameter_m: silicon.diameter,
+      orientation: silicon.orientation,
+      thickness_m: siliconThickness.value,
+      thickness_tolerance_m: siliconThickness.tolerance ?? undefined,
     },
-    films: stack.layers.map((layer) => ({
+    films: layers.map((layer) => ({
       side: layer.side,
-      thickness: layer.thickness.value,
-      stress: layer.stress.value,
-      youngsModulus: layer.youngsModulus,
-      poissonsRatio: layer.poissonsRatio,
-      expansion: layer.expansion,
+      thickness_m: layer.thickness.value,
+      stress_Pa: layer.stress.value,
+      youngs_modulus_Pa: layer.youngsModulus,
+      poissons_ratio: layer.poissonsRatio,
+      cte_per_K: layer.expansion,
       coverage: layer.coverage,
     })),
   };
@@ -129,10 +122,24 @@ function detailOf(stack: Stack, layers: StackLayerDetail[], scope: ActorScope): 
   };
 }
 
-/** A page of the stacks that the person may see. */
-export async function listStacks(scope: ActorScope, params: ListParams): Promise<ListPage<StackRow>> {
+/** How lists of stacks sort in the database, by the name used in the address. */
+const ORDERS: Record<(typeof STACK_SORTS)[number], (direction: "asc" | "desc") => QueryOrderMap<Stack>> = {
+  updated: (direction) => ({ updatedAt: direction }),
+  name: (direction) => ({ [raw((alias) => `lower(${alias}.name)`)]: direction }),
+  program: (direction) => ({ program: { name: direction } }),
+  thickness: (direction) => ({
+    [raw((alias) => `(${alias}.silicon_thickness->>'value')::double precision`)]: direction,
+  }),
+};
+
+/** A page of the stacks that the person may see, each with what its free wafer does, and up to which warp (m) it is called flat. */
+export async function listStacks(
+  scope: ActorScope,
+  params: ListParams,
+): Promise<ListPage<StackListRow> & { flatWithin: number }> {
+  requireSomewhere(scope, "see the work");
   return inScope(scope, async (em) => {
-    const direction = params.descending ? "desc" : "asc";
+    const order = ORDERS[STACK_SORTS.find((name) => name === params.sort) ?? "updated"];
     const [stacks, total] = await em.findAndCount(
       Stack,
       {
@@ -140,17 +147,8 @@ export async function listStacks(scope: ActorScope, params: ListParams): Promise
         ...(params.query ? { name: { $ilike: `%${escapeLike(params.query)}%` } } : {}),
       },
       {
-        populate: ["program", "silicon"],
-        orderBy: [
-          params.sort === "name"
-            ? { name: direction }
-            : params.sort === "program"
-              ? { program: { name: direction } }
-              : params.sort === "thickness"
-                ? { siliconThickness: { value: direction } as never }
-                : { updatedAt: params.descending ? "asc" : "desc" },
-          { id: "asc" },
-        ],
+        populate: ["program", "silicon", "updatedBy"],
+        orderBy: [order(params.descending ? "desc" : "asc"), { id: "asc" }],
         limit: PAGE_SIZE,
         offset: (params.page - 1) * PAGE_SIZE,
       },
@@ -159,7 +157,8 @@ export async function listStacks(scope: ActorScope, params: ListParams): Promise
       em,
       stacks.map(({ id }) => id),
     );
-    const rows = stacks.map((stack): StackRow => {
+    const limits = await readLimits(em);
+    const rows = stacks.map((stack): StackListRow => {
       const detail = detailOf(stack, layers.get(stack.id) ?? [], scope);
       return {
         id: stack.id,
@@ -169,23 +168,41 @@ export async function listStacks(scope: ActorScope, params: ListParams): Promise
         thickness: stack.siliconThickness.value,
         films: detail.layers.length,
         updatedAt: detail.stamp.updatedAt,
-        input: stackInputOf(detail),
+        updatedBy: detail.stamp.updatedBy,
+        answer: answerOrNull(requestOf(detail), limits),
       };
     });
-    return { rows, total, params };
+    return { rows, total, params, flatWithin: limits.flatWithin.value };
   });
 }
 
-/** One stack, whole. */
+/** Refuses who may do this in no program at all. */
+function requireSomewhere({ actor }: ActorScope, permission: ProgramPermission): void {
+  if (programsWhere(actor, permission).length === 0)
+    throw problem(403, `Your role may not ${permission} in any program. Ask a process owner.`);
+}
+
+/** Programs in which the person may add a stack; refuses who may in none. */
+export function programsForNewStack(scope: ActorScope): { id: string; name: string }[] {
+  requireSomewhere(scope, "edit stacks and flows");
+  return programsWhere(scope.actor, "edit stacks and flows").map(({ programId, programName }) => ({
+    id: programId,
+    name: programName,
+  }));
+}
+
+/** One stack, whole. @throws 404 for what is not there or not the person's to see */
 export async function getStack(scope: ActorScope, id: string | undefined): Promise<StackDetail> {
+  const stack = await findStack(scope, idFrom(id, "stack"));
+  if (!stack) throw notFound("stack");
+  return stack;
+}
+
+/** One stack, or null for what is not there or not the person's to see. */
+export async function findStack(scope: ActorScope, id: string): Promise<StackDetail | null> {
   return inScope(scope, async (em) => {
-    const stack = await em.findOne(
-      Stack,
-      { id: idFrom(id, "stack") },
-      { populate: ["program", "silicon", "updatedBy"] },
-    );
-    if (!stack) throw notFound("stack");
-    requireInProgram(scope, "see the work", stack.program.id, "stack");
+    const stack = await em.findOne(Stack, { id }, { populate: ["program", "silicon", "updatedBy"] });
+    if (!stack || !mayInProgram(scope.actor, "see the work", stack.program.id)) return null;
     const layers = await layersByStack(em, [stack.id]);
     return detailOf(stack, layers.get(stack.id) ?? [], scope);
   });
@@ -240,13 +257,13 @@ export async function saveStack(
   );
 }
 
-/** Layers have no life of their own: a save writes them anew in the order that the form had. */
+/** Films have no life of their own: a save writes them anew. The form lists them top to bottom, the table from the silicon outwards. */
 async function replaceLayers(em: EntityManager, stack: Stack, layers: StackValues["layers"]): Promise<void> {
   const films = await em.find(Film, { id: { $in: layers.map(({ film }) => film) } });
   const known = new Map(films.map((film) => [film.id, film]));
   for (const old of await em.find(StackLayer, { stack: stack.id })) em.remove(old);
   const next: Record<Side, number> = { front: 0, back: 0 };
-  for (const { side, film: filmId, thickness, stress, coverage } of layers) {
+  for (const { side, film: filmId, thickness, stress, coverage } of turnFront(layers)) {
     const film = known.get(filmId);
     if (!film) throw notFound("film");
     em.create(StackLayer, {

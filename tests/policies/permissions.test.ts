@@ -18,7 +18,7 @@ type Column = (typeof COLUMNS)[number];
 const PROGRAM_TABLE: Record<keyof typeof PROGRAM_PERMISSIONS, string> = {
   //                      g t s e p a
   "see released sheets": "y y y y y y",
-  "see the work": "       - y y y y y",
+  "see the work": "       - y y y y -",
   "upload scans": "       - y y y y -",
   "edit stacks and flows": "- - - y y -",
   "run assessments": "    - - - y y -",

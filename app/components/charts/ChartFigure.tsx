@@ -1,8 +1,9 @@
-import { lazy, Suspense, useSyncExternalStore } from "react";
+import { lazy, Suspense } from "react";
 import type { Plot } from "../drawings/plot.ts";
 import { PlotLegend } from "../drawings/PlotLegend.tsx";
 import { PrintPlot } from "../drawings/PrintPlot.tsx";
 import type { InteractivePlotProps } from "./InteractivePlot.tsx";
+import { useInBrowser } from "../ui/use-in-browser.ts";
 import { PlotTable } from "./PlotTable.tsx";
 
 export interface ChartFigureProps {
@@ -27,7 +28,7 @@ const InteractivePlot = lazy(() =>
  * place in the same frame, so nothing moves. Paper always gets the drawing.
  */
 export function ChartFigure({ plot, label, summary, xName }: ChartFigureProps) {
-  const inBrowser = useSyncExternalStore(subscribeToNothing, inTheBrowser, onTheServer);
+  const inBrowser = useInBrowser();
   const drawing = <StaticPlot plot={plot} label={label} />;
   return (
     <figure className="@container">
@@ -67,16 +68,4 @@ function StaticPlot({ plot, label }: { plot: Plot; label: string }) {
       />
     </>
   );
-}
-
-function subscribeToNothing() {
-  return () => undefined;
-}
-
-function inTheBrowser() {
-  return true;
-}
-
-function onTheServer() {
-  return false;
 }

@@ -11,7 +11,8 @@ export interface AnswerFigure {
 }
 
 export interface AnswerLineProps {
-  outcome: Outcome;
+  /** Left out where nothing is judged, as for a measurement. */
+  outcome?: Outcome;
   /** Beside the outcome, such as 'first at step 9'. */
   where?: string;
   /** One or two plain sentences; each is set as a line of its own. */
@@ -20,16 +21,20 @@ export interface AnswerLineProps {
   figures: readonly AnswerFigure[];
   /** Level of the heading that the sentences are. */
   level?: 1 | 2;
+  /** Figures in a row under the sentences, for values that come with their uncertainty. */
+  figuresBelow?: boolean;
 }
 
 /** The answer first: outcome, sentences in plain words, then the figures. Sits at the top of a frame. */
-export function AnswerLine({ outcome, where, sentences, figures, level = 1 }: AnswerLineProps) {
+export function AnswerLine({ outcome, where, sentences, figures, level = 1, figuresBelow = false }: AnswerLineProps) {
   const Heading = level === 1 ? "h1" : "h2";
   return (
-    <section className="grid wide:grid-cols-[minmax(0,1fr)_384px]" aria-label="Answer">
+    <section className={`grid ${figuresBelow ? "" : "wide:grid-cols-[minmax(0,1fr)_384px]"}`} aria-label="Answer">
       <div className="p-4 tablet:pt-6 tablet:pr-10 tablet:pb-7 tablet:pl-6">
-        <FindingTag outcome={outcome}>{where}</FindingTag>
-        <Heading className="mt-3 max-w-[40em] text-figure font-medium text-pretty tablet:text-answer">
+        {outcome && <FindingTag outcome={outcome}>{where}</FindingTag>}
+        <Heading
+          className={`${outcome ? "mt-3 " : ""}max-w-[40em] text-figure font-medium text-pretty tablet:text-answer`}
+        >
           {sentences.map((sentence) => (
             <span key={sentence} className="block">
               {noBreak(sentence)}{" "}
@@ -37,9 +42,18 @@ export function AnswerLine({ outcome, where, sentences, figures, level = 1 }: An
           ))}
         </Heading>
       </div>
-      <dl className="grid grid-cols-2 overflow-hidden border-t border-line tablet:grid-cols-4 wide:grid-cols-2 wide:border-t-0 wide:border-l">
+      <dl
+        className={`grid overflow-hidden border-t border-line ${
+          figuresBelow
+            ? "tablet:grid-cols-2 wide:grid-cols-4"
+            : "grid-cols-2 tablet:grid-cols-4 wide:grid-cols-2 wide:border-t-0 wide:border-l"
+        }`}
+      >
         {figures.map((figure) => (
-          <div key={figure.label} className="-mt-px -ml-px border-t border-l border-line px-4 py-2 tablet:py-3">
+          <div
+            key={figure.label}
+            className="-mt-px -ml-px border-t border-l border-line px-3 py-2 tablet:px-4 tablet:py-3"
+          >
             <dt className="text-label text-quiet">{figure.label}</dt>
             <dd>
               <span className="block text-figure font-medium">{noBreak(figure.value)}</span>

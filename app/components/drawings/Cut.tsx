@@ -6,11 +6,17 @@ import { CutKey } from "./CutKey.tsx";
 import type { CutLayer } from "./cut-layer.ts";
 import { CUT, cutLayout, labelBaselines, NAME_SIZE, type CutPlace } from "./cut-layout.ts";
 import { CutPart } from "./CutPart.tsx";
+import { selectInPlace } from "./select-in-place.ts";
 
 /** The words at one end of the cut, with the link that adds a film there. */
 export interface CutEnd {
   words: string;
-  add?: { words: string; href: string };
+  add?: {
+    words: string;
+    href: string;
+    /** Adds it in place, where scripts run. */
+    onAdd?: () => void;
+  };
 }
 
 export interface CutProps {
@@ -101,7 +107,7 @@ function End({ end, y }: { end: CutEnd; y: number }) {
         {end.words}
       </text>
       {end.add ? (
-        <a className="drawing-link" href={end.add.href}>
+        <a className="drawing-link" href={end.add.href} onClick={selectInPlace(end.add.onAdd)}>
           <text x={CUT.left} y={y + 17} style={{ fill: colour("copper"), textDecoration: "underline" }}>
             {end.add.words}
           </text>

@@ -1,8 +1,8 @@
 import { colour } from "./colour.ts";
 import { coordinate } from "./coordinate.ts";
 
-/** What a layer is made of, as far as a cut shows it. */
-export type MaterialKind = "metal" | "polymer" | "inorganic" | "solder" | "silicon" | "glass" | "adhesive";
+/** What a layer is made of, as far as a cut shows it; `blank` while nobody has said. */
+export type MaterialKind = "metal" | "polymer" | "inorganic" | "solder" | "silicon" | "glass" | "adhesive" | "blank";
 
 export interface CutMaterialProps {
   kind: MaterialKind;
@@ -21,7 +21,7 @@ export function CutMaterial({ kind, x, y, width, height }: CutMaterialProps) {
   return (
     <>
       <rect x={x} y={y} width={width} height={height} fill={colour(kind === "silicon" ? "siwash" : "raised")} />
-      {kind === "silicon" ? null : (
+      {kind === "silicon" || kind === "blank" ? null : (
         <svg x={x} y={y} width={width} height={height} overflow="hidden">
           <Filling kind={kind} width={width} height={height} />
         </svg>
@@ -30,7 +30,7 @@ export function CutMaterial({ kind, x, y, width, height }: CutMaterialProps) {
   );
 }
 
-type FillingProps = { kind: Exclude<MaterialKind, "silicon">; width: number; height: number };
+type FillingProps = { kind: Exclude<MaterialKind, "silicon" | "blank">; width: number; height: number };
 
 function Filling({ kind, width, height }: FillingProps) {
   switch (kind) {

@@ -20,15 +20,30 @@ const WARP = { base: 346, full: 68, cap: 1.2 };
 export function StripScales({ steps, columns }: StripScalesProps) {
   return (
     <>
-      <Names steps={steps} columns={columns} />
-      <Silicon steps={steps} columns={columns} />
-      <Temperature steps={steps} columns={columns} />
+      <StripPlan steps={steps} columns={columns} />
       <Warp steps={steps} columns={columns} />
     </>
   );
 }
 
-function Names({ steps, columns }: StripScalesProps) {
+/** What the rows that need no result draw from. */
+interface PlanRowProps {
+  steps: readonly Pick<StripStep, "number" | "shortName" | "selected" | "silicon" | "temperature">[];
+  columns: StripScalesProps["columns"];
+}
+
+/** The rows that a flow has before anything is computed: numbers and names, silicon, temperature. */
+export function StripPlan(props: PlanRowProps) {
+  return (
+    <>
+      <Names {...props} />
+      <Silicon {...props} />
+      <Temperature {...props} />
+    </>
+  );
+}
+
+function Names({ steps, columns }: PlanRowProps) {
   return steps.map((step, index) => {
     const middle = columns.left + (index + 0.5) * columns.width;
     const weight = step.selected ? 600 : 400;
@@ -48,7 +63,7 @@ function Names({ steps, columns }: StripScalesProps) {
   });
 }
 
-function Silicon({ steps, columns }: StripScalesProps) {
+function Silicon({ steps, columns }: PlanRowProps) {
   const thickest = Math.max(...steps.map((step) => step.silicon.thickness));
   const at = (index: number) => columns.left + index * columns.width;
   const height = (thickness: number) => 102 - (thickness / thickest) * 38;
@@ -75,7 +90,7 @@ function Silicon({ steps, columns }: StripScalesProps) {
   );
 }
 
-function Temperature({ steps, columns }: StripScalesProps) {
+function Temperature({ steps, columns }: PlanRowProps) {
   const hottest = Math.max(LEAST_TOP, ...steps.map((step) => step.temperature.peak));
   const height = (kelvin: number) => 162 - ((kelvin - ROOM_TEMPERATURE) / (hottest - ROOM_TEMPERATURE)) * 34;
   const inset = Math.min(14, columns.width * 0.19);

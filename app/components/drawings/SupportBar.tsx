@@ -1,12 +1,12 @@
 import type { Outcome, SupportClass } from "#app/engine/vocabulary.ts";
 import { colour } from "./colour.ts";
-import { plannedRowsHeight } from "./planned-spans.ts";
+import { lineBarLayout, numberAt, PLANNED_TITLE } from "./line-bar-layout.ts";
 import { runsOf } from "./runs-of.ts";
 import { SUPPORT_SIGNS } from "./severity.ts";
 import { stackRows } from "./stack-rows.ts";
-import { textWidth } from "./text-width.ts";
 import { SupportPlanned } from "./SupportPlanned.tsx";
 import { SupportRequired } from "./SupportRequired.tsx";
+import { textWidth } from "./text-width.ts";
 
 export interface SupportBarProps {
   /** One entry per step, in order. */
@@ -28,72 +28,59 @@ export function SupportBar(props: SupportBarProps) {
   return props.variant === "floor" ? <FloorBar {...props} /> : <LineBar {...props} />;
 }
 
-function numberOf(props: SupportBarProps, index: number): number {
-  return props.numbers?.[index] ?? index + 1;
-}
-
 function LineBar(props: SupportBarProps) {
   const { required, planned, outcomes, label, variant } = props;
-  const paper = variant === "paper";
-  const width = paper ? 680 : 1200;
-  const gutter = paper ? 0 : 1;
-  const columnWidth = (width - 2 * gutter) / required.length;
-  const textSize = paper ? 10 : 12.5;
-  const bar = paper ? { y: 25, height: 28 } : { y: 32, height: 32 };
-  const lineY = paper ? 69 : 82;
-  const below = plannedRowsHeight(planned, columnWidth, textSize);
-  const headY = paper ? 19 : 24;
-  const noneBefore = planned.findIndex((each) => each !== null);
-  const hasRoomForTitle = noneBefore < 0 || noneBefore * columnWidth > (paper ? 86 : 110);
+  const { sizes, columnWidth, height, numbered, narrowWords, lineHeight, hasRoomForTitle } = lineBarLayout(props);
+  const { width, gutter, text, numberY, headY, bar, plannedY, line, thin, extension } = sizes;
+  const narrowY = height - narrowWords.length * lineHeight;
   return (
-    <svg
-      className="block h-auto w-full"
-      viewBox={`0 0 ${width} ${lineY + (paper ? 13 : 16) + below}`}
-      role="img"
-      aria-label={label}
-    >
+    <svg className="block h-auto w-full" viewBox={`0 0 ${width} ${height}`} role="img" aria-label={label}>
       {required.map((_, index) => (
         <g key={index}>
           {index === 0 ? null : (
-            <path
-              d={`M${gutter + index * columnWidth} 0V${headY}`}
-              stroke={colour("ink")}
-              strokeWidth={paper ? 0.6 : 1}
-            />
+            <path d={`M${gutter + index * columnWidth} 0V${headY}`} stroke={colour("ink")} strokeWidth={line} />
           )}
-          <text
-            x={gutter + (index + 0.5) * columnWidth}
-            y={paper ? 14 : 17}
-            textAnchor="middle"
-            style={{ fontSize: paper ? 11 : 12.5, fontWeight: 600 }}
-          >
-            {numberOf(props, index)}
-          </text>
+          {index === 0 || numberAt(props, index) % numbered === 0 ? (
+            <text
+              x={gutter + (index + 0.5) * columnWidth}
+              y={numberY}
+              textAnchor="middle"
+              style={{ fontSize: text, fontWeight: 600 }}
+            >
+              {numberAt(props, index)}
+            </text>
+          ) : null}
         </g>
       ))}
-      <path d={`M0 ${headY}H${width}`} stroke={colour("ink")} strokeWidth={paper ? 0.6 : 1} />
+      <path d={`M0 ${headY}H${width}`} stroke={colour("ink")} strokeWidth={line} />
       <SupportRequired
         required={required}
         outcomes={outcomes}
         x={gutter}
         columnWidth={columnWidth}
-        textSize={paper ? 13 : 12.5}
+        textSize={text}
+        wordsElsewhere={variant === "paper" ? "narrow" : undefined}
         {...bar}
       />
       {hasRoomForTitle ? (
-        <text x={gutter + 4} y={lineY + textSize * 0.36} style={{ fontSize: textSize }}>
-          Planned support
+        <text x={gutter + 4} y={plannedY + text * 0.36} style={{ fontSize: text }}>
+          {PLANNED_TITLE}
         </text>
       ) : null}
       <SupportPlanned
         planned={planned}
         x={gutter}
-        y={lineY}
+        y={plannedY}
         columnWidth={columnWidth}
-        textSize={textSize}
-        lineWidth={paper ? 0.6 : 0.75}
-        extension={paper ? [12, 7] : [15, 9]}
+        textSize={text}
+        lineWidth={thin}
+        extension={extension}
       />
+      {narrowWords.map((words, row) => (
+        <text key={row} x={gutter + 4} y={narrowY + row * lineHeight + text * 0.75} style={{ fontSize: text }}>
+          {words}
+        </text>
+      ))}
     </svg>
   );
 }
@@ -118,7 +105,14 @@ function FloorBar(props: SupportBarProps) {
       role="img"
       aria-label={label}
     >
-      <SupportRequired required={required} outcomes={outcomes} x={0} columnWidth={columnWidth} withoutWords {...bar} />
+      <SupportRequired
+        required={required}
+        outcomes={outcomes}
+        x={0}
+        columnWidth={columnWidth}
+        wordsElsewhere="all"
+        {...bar}
+      />
       {words.map(({ at, word }, index) => (
         <text
           key={at}
@@ -159,7 +153,7 @@ function FloorBar(props: SupportBarProps) {
                 fill: here ? colour("surface") : index < (current ?? 0) ? colour("quiet") : undefined,
               }}
             >
-              {numberOf(props, index)}
+              {numberAt(props, index)}
             </text>
           </g>
         );

@@ -1,9 +1,8 @@
 import type { Outcome, SupportClass } from "#app/engine/vocabulary.ts";
 import { colour } from "./colour.ts";
 import { HatchBox } from "./HatchBox.tsx";
-import { runsOf } from "./runs-of.ts";
-import { OUTCOME_SIGNS, SUPPORT_SIGNS, type HatchLevel } from "./severity.ts";
-import { textWidth } from "./text-width.ts";
+import type { HatchLevel } from "./severity.ts";
+import { linesWidth, supportSegments, wordLines } from "./support-segments.ts";
 
 export interface SupportRequiredProps {
   /** One entry per step. */
@@ -17,68 +16,38 @@ export interface SupportRequiredProps {
   /** Size of the words, px. */
   textSize?: number;
   scale?: number;
-  /** Words stand below the bar instead of on it. */
-  withoutWords?: boolean;
+  /** Which words the caller writes elsewhere: all of them, or those that have no room on their segment. */
+  wordsElsewhere?: "all" | "narrow";
 }
-
-/** How a word may be broken or shortened when its segment is narrow, widest first. */
-const SHORTER_WORDS: Readonly<Record<string, readonly (readonly string[])[]>> = {
-  "Thin-wafer gripper": [["Thin-wafer gripper"], ["Thin-wafer", "gripper"], ["Gripper"]],
-  "Tape or ring": [["Tape or ring"], ["Tape or", "ring"]],
-  "None fits": [["None fits"], ["None", "fits"]],
-  "Cannot judge": [["Cannot judge"], ["Cannot", "judge"]],
-  "Do not run": [["Do not run"], ["Do not", "run"]],
-};
 
 /** The support that each step needs, as hatched segments with their word on a plate, for use inside a drawing. */
 export function SupportRequired(props: SupportRequiredProps) {
-  const { required, outcomes = [], x, y, columnWidth, height, textSize = 12.5, scale = 1 } = props;
-  const withWords = props.withoutWords !== true;
-  const at = (index: number) => x + index * columnWidth;
-  const blocked = outcomes.flatMap((outcome, index) =>
-    outcome === "do not run" || outcome === "cannot judge" ? [{ outcome, index }] : [],
-  );
+  const { required, outcomes = [], x, y, columnWidth, height, textSize = 12.5, scale = 1, wordsElsewhere } = props;
+  const box = ({ from, to }: { from: number; to: number }) => ({
+    x: x + from * columnWidth,
+    y,
+    width: (to - from) * columnWidth,
+    height,
+  });
   return (
     <g>
-      {runsOf(required).map((run) => {
-        const sign = SUPPORT_SIGNS[run.value];
-        const segment = { x: at(run.from), y, width: (run.to - run.from) * columnWidth, height };
-        // The word stands at the segment's start, or after the first blocked column that would cover it.
-        const free = firstFreeStretch(run, new Set(blocked.map(({ index }) => index)));
-        return (
-          <g key={run.from}>
-            <HatchBox level={sign.level} {...segment} scale={scale} />
-            {withWords && free ? (
-              <Plate
-                word={sign.word}
-                level={sign.level}
-                size={textSize}
-                box={{ x: at(free.from), y, width: (free.to - free.from) * columnWidth, height }}
-              />
-            ) : null}
-          </g>
-        );
-      })}
-      {blocked.map(({ outcome, index }) => {
-        const sign = OUTCOME_SIGNS[outcome];
-        const box = { x: at(index), y, width: columnWidth, height };
-        return (
-          <g key={index}>
-            <HatchBox level={sign.level} {...box} scale={scale} />
-            {withWords ? <Plate word={sign.word} level={sign.level} size={textSize} box={box} centred /> : null}
-          </g>
-        );
-      })}
+      {supportSegments(required, outcomes).map((segment) => (
+        <g key={`${segment.blocked} ${segment.from}`}>
+          <HatchBox level={segment.level} {...box(segment)} scale={scale} />
+          {segment.wordAt && wordsElsewhere !== "all" ? (
+            <Plate
+              word={segment.word}
+              level={segment.level}
+              size={textSize}
+              box={box(segment.wordAt)}
+              centred={segment.blocked}
+              onlyIfFits={wordsElsewhere === "narrow"}
+            />
+          ) : null}
+        </g>
+      ))}
     </g>
   );
-}
-
-function firstFreeStretch(run: { from: number; to: number }, taken: ReadonlySet<number>) {
-  let from = run.from;
-  while (from < run.to && taken.has(from)) from += 1;
-  let to = from;
-  while (to < run.to && !taken.has(to)) to += 1;
-  return to > from ? { from, to } : null;
 }
 
 function Plate(props: {
@@ -86,14 +55,14 @@ function Plate(props: {
   level: HatchLevel;
   size: number;
   box: { x: number; y: number; width: number; height: number };
-  centred?: boolean;
+  centred: boolean;
+  onlyIfFits: boolean;
 }) {
-  const { word, level, size, box, centred = false } = props;
-  const widthOf = (lines: readonly string[]) => Math.max(...lines.map((line) => textWidth(line, size, true)));
-  const choices = SHORTER_WORDS[word] ?? [[word]];
-  const lines = choices.find((each) => widthOf(each) + 8 <= box.width) ?? choices.at(-1) ?? [word];
-  const inset = centred || lines.length > 1 || box.width < widthOf(lines) + 20 ? null : 7;
-  const width = Math.min(widthOf(lines) + (inset === null ? 6 : 14), box.width - 2);
+  const { word, level, size, box, centred, onlyIfFits } = props;
+  const { lines, fits } = wordLines(word, box.width, size);
+  if (onlyIfFits && !fits) return null;
+  const inset = centred || lines.length > 1 || box.width < linesWidth(lines, size) + 20 ? null : 7;
+  const width = Math.min(linesWidth(lines, size) + (inset === null ? 6 : 14), box.width - 2);
   const lineHeight = size * 1.1;
   const height = lines.length === 1 ? size + 5.5 : Math.min(box.height - 3, lines.length * lineHeight + 1.5);
   const left = inset === null ? box.x + (box.width - width) / 2 : box.x + inset;

@@ -20,6 +20,8 @@ export interface TitleBlockProps {
   fields: TitleBlockFields;
   /** screen: five rows, 384 to 420 px wide. paper: four rows, 112 mm wide, without the language. */
   variant?: "screen" | "paper";
+  /** Its name where a page has several. */
+  label?: string;
 }
 
 const CELLS: readonly [area: string, label: string, field: keyof TitleBlockFields, weight?: "title" | "strong"][] = [
@@ -38,11 +40,11 @@ const CELLS: readonly [area: string, label: string, field: keyof TitleBlockField
 ];
 
 /** The title block in the lower right corner of an assessment or a sheet; it shares the lines of the frame around it. */
-export function TitleBlock({ fields, variant = "screen" }: TitleBlockProps) {
+export function TitleBlock({ fields, variant = "screen", label = "Title block" }: TitleBlockProps) {
   const paper = variant === "paper";
   const cells = paper ? CELLS.filter(([area]) => area !== "language") : CELLS;
   return (
-    <section className={`title-block${paper ? " title-block-paper" : ""}`} aria-label="Title block">
+    <section className={`title-block${paper ? " title-block-paper" : ""}`} aria-label={label}>
       <dl>
         {cells.map(([area, label, field, weight]) => (
           <div key={area} style={{ gridArea: area }}>

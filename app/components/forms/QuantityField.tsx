@@ -2,11 +2,14 @@ import { getInputProps, type FieldMetadata } from "@conform-to/react";
 import { useState, type ReactNode } from "react";
 import type { Dimension } from "#app/engine/units/dimensions.ts";
 import { parseQuantity } from "#app/engine/units/parse-quantity.ts";
+import { readQuantity, type QuantityRule } from "#app/lib/read-quantity.ts";
 
 interface Props {
   field: FieldMetadata<string | undefined>;
   label: string;
   dimension: Dimension;
+  /** the rule that the server reads it by, so that a value out of range is told while it is typed */
+  rule?: QuantityRule;
   /** shown while nothing is typed: an example with its unit */
   example?: string;
   hint?: ReactNode;
@@ -14,12 +17,13 @@ interface Props {
 }
 
 /** A quantity typed with its unit. What was understood stands below as it is typed; a fault is said in a sentence. */
-export function QuantityField({ field, label, dimension, example, hint, className = "" }: Props) {
-  const initial = field.initialValue ?? "";
-  const [typed, setTyped] = useState(initial);
-  const changed = typed !== initial;
-  const error = changed ? undefined : field.errors?.[0];
-  const reading = typed.trim() === "" ? null : parseQuantity(typed, dimension);
+export function QuantityField({ field, label, dimension, rule, example, hint, className = "" }: Props) {
+  const [typed, setTyped] = useState(textOf(field.initialValue));
+  // What the server said is about what was sent: it goes with the first key, until the server has said something again.
+  const [answered, setAnswered] = useState<string[]>();
+  const error = field.errors === answered ? undefined : field.errors?.[0];
+  const read = () => (rule ? readQuantity(typed, rule) : parseQuantity(typed, dimension));
+  const reading = typed.trim() === "" ? null : read();
   const fault = error ?? (reading && !reading.ok ? reading.message : undefined);
   return (
     <div className={`field ${className}`}>
@@ -33,7 +37,10 @@ export function QuantityField({ field, label, dimension, example, hint, classNam
         placeholder={example}
         aria-invalid={fault ? true : undefined}
         aria-describedby={field.errorId}
-        onInput={(event) => setTyped(event.currentTarget.value)}
+        onInput={(event) => {
+          setTyped(event.currentTarget.value);
+          setAnswered(field.errors);
+        }}
       />
       <small id={field.errorId} aria-live="polite">
         {fault ?? (reading?.ok ? reading.understood : hint)}
@@ -41,3 +48,6 @@ export function QuantityField({ field, label, dimension, example, hint, classNam
     </div>
   );
 }
+
+/** The text of a field; a post that is not from one of our forms may have sent something else under its name. */
+const textOf = (value: unknown) => (typeof value === "string" ? value : "");

@@ -1,11 +1,19 @@
 import type { ReactNode } from "react";
 import { useNavigation } from "react-router";
 
+interface Props {
+  children: ReactNode;
+  /** what it says while the form is on its way */
+  busy: string;
+  /** id of the form that it sends, where it stands outside of it */
+  form?: string;
+}
+
 /** The one filled button of a form. It keeps its place while the form is on its way. */
-export function SubmitButton({ children, busy }: { children: ReactNode; busy: string }) {
+export function SubmitButton({ children, busy, form }: Props) {
   const waiting = useNavigation().state === "submitting";
   return (
-    <button type="submit" className="btn btn-primary" disabled={waiting}>
+    <button type="submit" form={form} className="btn btn-primary" disabled={waiting}>
       {waiting ? busy : children}
     </button>
   );

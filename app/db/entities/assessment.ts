@@ -11,13 +11,15 @@ import { Program } from "./program.ts";
 export const Assessment = defineEntity({
   name: "Assessment",
   tableName: "assessment",
-  uniques: [{ properties: ["flow", "number"] }],
+  uniques: [{ properties: ["flow", "number"] }, { properties: ["program", "documentNumber"] }],
   properties: {
     id: p.uuid().primary(),
     program: () => p.manyToOne(Program).index(),
     flow: () => p.manyToOne(Flow),
     /** counts up within a flow, from 1 */
     number: p.integer(),
+    /** counts up within a program, from 1: no two documents of a program have the same */
+    documentNumber: p.integer(),
     flowName: p.text(),
     engineVersion: p.text(),
     /** SHA-256 of the inputs as stored */

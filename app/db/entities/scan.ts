@@ -1,4 +1,4 @@
-import { defineEntity, p, type InferEntity } from "@mikro-orm/core";
+import { defineEntity, p, type InferEntity, type Opt } from "@mikro-orm/core";
 import type { ScanParameters, ScanResult } from "#app/schemas/scan-result.ts";
 import { Film } from "./film.ts";
 import { Person } from "./person.ts";
@@ -17,7 +17,28 @@ export const Scan = defineEntity({
     before: () => p.manyToOne(ScanFile),
     after: () => p.manyToOne(ScanFile),
     parameters: p.json<ScanParameters>(),
-    result: p.json<ScanResult>(),
+    result: p.json<ScanResult>().lazy(),
+    /** figures of the result that lists show and sort by, without its curves: Pa, Pa and m */
+    stress: p
+      .double()
+      .$type<Opt<number>>()
+      .formula((table) => `(${table.alias}.result->>'stress')::double precision`),
+    stressUncertainty: p
+      .double()
+      .$type<Opt<number>>()
+      .formula((table) => `(${table.alias}.result->>'stressUncertainty')::double precision`),
+    bowChange: p
+      .double()
+      .$type<Opt<number>>()
+      .formula((table) => `(${table.alias}.result->>'bowChange')::double precision`),
+    bowUncertainty: p
+      .double()
+      .$type<Opt<number>>()
+      .formula((table) => `(${table.alias}.result->>'bowUncertainty')::double precision`),
+    curled: p
+      .boolean()
+      .$type<Opt<boolean>>()
+      .formula((table) => `(${table.alias}.result->'curled' <> 'null'::jsonb)`),
     engineVersion: p.text(),
     createdAt: p.datetime(),
     createdBy: () => p.manyToOne(Person),

@@ -1,15 +1,6 @@
 import type { AssessedStep, FlowAssessment } from "./assess.ts";
 import type { FlowInput } from "./model.ts";
-import { supportRank, type Outcome, type SupportClass } from "../vocabulary.ts";
-
-/** The words of an outcome as they stand alone, sentence case. */
-export const OUTCOME_WORDS: Record<Outcome, string> = {
-  clear: "Clear",
-  caution: "Caution",
-  "needs support": "Needs support",
-  "cannot judge": "Cannot judge",
-  "do not run": "Do not run",
-};
+import { supportRank, type SupportClass } from "../vocabulary.ts";
 
 /** Steps in a row that need the same support, by number. */
 export interface SupportSpan {
@@ -31,7 +22,7 @@ export function supportSpans(steps: AssessedStep[]): SupportSpan[] {
 }
 
 /** The step that comes nearest to, or farthest beyond, its tool's warp limit. */
-export function tightestStep({ findings }: FlowAssessment) {
+export function tightestStep({ findings }: Pick<FlowAssessment, "findings">) {
   const warps = findings.filter(({ rule, limit, figures }) => rule === 2 && limit && figures[0]);
   const use = (finding: (typeof warps)[number]) =>
     (finding.figures[0]?.value ?? 0) / (finding.limit?.value ?? Infinity);

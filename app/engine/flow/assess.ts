@@ -4,6 +4,7 @@ import { requiredAt } from "../rules/rule-01-thickness.ts";
 import { RULES } from "../rules/rules.ts";
 import { outcomeRank, type Outcome, type SupportClass } from "../vocabulary.ts";
 import type { FlowInput } from "./model.ts";
+import { statedInputs } from "./stated-inputs.ts";
 import { flowUncertainty, type Contribution } from "./uncertainty.ts";
 import { walkFlow, type StepState } from "./walk.ts";
 
@@ -35,6 +36,8 @@ export interface FlowAssessment {
   verdict: Verdict;
   /** inputs that nobody measured or looked up */
   assumed: AssumedInput[];
+  /** how many inputs there are, assumed ones included */
+  inputs: number;
 }
 
 /** The worst of some findings; clear when there are none. */
@@ -56,6 +59,7 @@ export function assessFlow(flow: FlowInput, limits: SiteLimits): FlowAssessment 
   const findings = steps.flatMap((state) => RULES.flatMap((rule) => rule.judge(context, state)));
   const outcome = worstOutcome(findings);
   const first = findings.find((finding) => finding.outcome === outcome);
+  const inputs = statedInputs(flow);
   return {
     steps: steps.map((state, index) => ({
       state,
@@ -70,32 +74,7 @@ export function assessFlow(flow: FlowInput, limits: SiteLimits): FlowAssessment 
       step: outcome === "clear" ? null : (first?.step ?? null),
       rule: outcome === "clear" ? null : (first?.rule ?? null),
     },
-    assumed: assumedInputs(flow),
+    assumed: inputs.flatMap(({ step, what, source }) => (source === "assumed" ? [{ step, what }] : [])),
+    inputs: inputs.length,
   };
-}
-
-/** Everything in a flow whose source is `assumed`, with the first step that uses it. */
-function assumedInputs(flow: FlowInput): AssumedInput[] {
-  const found = new Map<string, AssumedInput>();
-  const note = (step: number, what: string, measured: { source: string } | null | undefined) => {
-    if (measured?.source === "assumed" && !found.has(what)) found.set(what, { step, what });
-  };
-  note(1, "Incoming silicon thickness", flow.wafer.thickness);
-  flow.steps.forEach((step, index) => {
-    const number = index + 1;
-    note(number, `Silicon after step ${number}`, step.siliconAfter);
-    note(number, `Ground face force at step ${number}`, step.groundFaceForce);
-    for (const { film, thickness, stress } of step.adds) {
-      note(number, `${film.name}: stress`, stress);
-      note(number, `${film.name}: thickness`, thickness);
-      note(number, `${film.name}: modulus`, film.youngsModulus);
-      note(number, `${film.name}: expansion`, film.expansion);
-      note(number, `${film.name}: yield stress`, film.yieldStress);
-    }
-    if (!step.bond) return;
-    note(number, `${step.bond.carrier.name}: expansion`, step.bond.carrier.expansion);
-    note(number, `${step.bond.material.name}: locked-in modulus`, step.bond.material.effectiveModulus);
-    note(number, `${step.bond.material.name}: thickness`, step.bond.thickness);
-  });
-  return [...found.values()];
 }

@@ -73,6 +73,7 @@ function remove(films: FilmState[], side: Side, step: StepInput): FilmState[] {
 }
 
 function mountAfter(before: WaferState, step: StepInput): WaferState["mount"] {
+  if (step.kind === "bond") return null;
   if (step.kind === "laminate tape") return "grinding tape";
   if (step.kind === "mount on frame") return step.planned === "edge ring" ? "edge ring" : "film frame";
   if (step.planned === "bare" || step.planned === "thin-wafer gripper") return null;

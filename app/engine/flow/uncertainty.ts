@@ -1,3 +1,4 @@
+import { EngineInputError } from "../errors.ts";
 import { standardUncertainty, type Measured } from "../measured.ts";
 import type { SiteLimits } from "../rules/limits.ts";
 import type { StepUncertainty } from "../rules/finding.ts";
@@ -105,21 +106,33 @@ function moved(flow: FlowInput, unknown: Unknown, by: number): FlowInput {
   return unknown.places.reduce((result, place) => set(result, place) as FlowInput, flow);
 }
 
+/** The flow walked with one unknown moved; null where that leaves what can be computed, such as a negative thickness. */
+function walkMoved(flow: FlowInput, limits: SiteLimits, unknown: Unknown, by: number): StepState[] | null {
+  try {
+    return walkFlow(moved(flow, unknown, by), limits).steps;
+  } catch (error) {
+    if (error instanceof EngineInputError) return null;
+    throw error;
+  }
+}
+
 /**
  * Standard uncertainty of every step's sagitta at 25 °C and at peak, first order (JCGM 100:2008 5.1.2, equation 10), each
- * sensitivity from the walk itself one standard uncertainty up and down. Inputs without a tolerance count as exact.
+ * sensitivity from the walk itself one standard uncertainty up and down, or to one side where the other cannot be computed.
+ * Inputs without a tolerance count as exact.
  */
 export function flowUncertainty(flow: FlowInput, limits: SiteLimits): FlowUncertainty[] {
   const sum = flow.steps.map(() => ({ atRoom: 0, atPeak: 0, budget: [] as Contribution[] }));
   const nominal = walkFlow(flow, limits).steps;
   for (const unknown of unknowns(flow)) {
     const u = standardUncertainty(unknown.measured);
-    const up = walkFlow(moved(flow, unknown, u), limits).steps;
-    const down = walkFlow(moved(flow, unknown, -u), limits).steps;
+    const up = walkMoved(flow, limits, unknown, u);
+    const down = walkMoved(flow, limits, unknown, -u);
+    const widths = Math.max(1, [up, down].filter(Boolean).length);
     sum.forEach((total, index) => {
       const half = (pick: (state: StepState) => number | undefined) => {
-        const [high, low] = [up[index], down[index]];
-        return high && low ? ((pick(high) ?? 0) - (pick(low) ?? 0)) / 2 : 0;
+        const [high, low] = [(up ?? nominal)[index], (down ?? nominal)[index]];
+        return high && low ? ((pick(high) ?? 0) - (pick(low) ?? 0)) / widths : 0;
       };
       const room = half((state) => state.atRoom?.sagitta);
       total.atRoom += room ** 2;

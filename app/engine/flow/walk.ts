@@ -54,14 +54,14 @@ export function walkFlow(flow: FlowInput, limits: SiteLimits, options: WalkOptio
     try {
       const applied = applyStep(before, step, field);
       const bonded = applied.bond !== null;
-      const hot = settle(applied, orientation, step.peakTemperature, { metalHistory });
-      const cold = settle(hot.state, orientation, ROOM_TEMPERATURE, { metalHistory });
+      const flat = heldFlat(step.planned);
+      const hot = settle(applied, orientation, step.peakTemperature, { metalHistory, heldFlat: flat });
+      const cold = settle(hot.state, orientation, ROOM_TEMPERATURE, { metalHistory, heldFlat: flat });
       state = cold.state;
       const bare = layersOf(state, orientation, ROOM_TEMPERATURE, { carrier: false });
       const free = bonded ? solveLaminate(bare.layers, { temperature: ROOM_TEMPERATURE }) : cold.solution;
       const shape = (at: Settled, temperature: number) =>
         lyingShape(flow.wafer, at.layers, at.solution, temperature, bonded);
-      const flat = heldFlat(step.planned);
       const atRoom = flat ? null : shape(cold, ROOM_TEMPERATURE);
       const heated = step.peakTemperature > ROOM_TEMPERATURE;
       return {
@@ -81,12 +81,21 @@ export function walkFlow(flow: FlowInput, limits: SiteLimits, options: WalkOptio
         })),
       };
     } catch (error) {
-      if (error instanceof EngineInputError && !error.field.startsWith("steps["))
-        throw new EngineInputError(`${field}.${error.field}`, error.reason, error.allowed);
-      throw error;
+      throw error instanceof EngineInputError ? atStep(error, field) : error;
     }
   });
   return { steps };
+}
+
+/** A refusal with the step that it concerns. A curvature is nobody's input, so that one is said by its causes. */
+function atStep({ field, reason, allowed }: EngineInputError, step: string): EngineInputError {
+  if (field.startsWith("steps[")) return new EngineInputError(field, reason, allowed);
+  if (field === "linearCurvature")
+    return new EngineInputError(
+      step,
+      "the films would bend the wafer beyond anything that can be computed. Check their thickness, stress and modulus, and the silicon left",
+    );
+  return new EngineInputError(`${step}.${field}`, reason, allowed);
 }
 
 /** Rigid-substrate force of each side's films as they are now: what they would pull with if the silicon were thick. */

@@ -26,26 +26,38 @@ export interface Settled {
   filmStress: { film: FilmState; stress: number }[];
 }
 
+/** Mean stress of each layer, Pa: as the stack lies by itself, or with its bending taken out by what holds it flat. */
+function layerStresses(layers: Layer[], solution: LaminateResult, heldFlat: boolean): number[] {
+  if (!heldFlat) return solution.meanStress;
+  const strain = solution.midplaneStrain - solution.curvature * solution.neutralPlane;
+  return layers.map(
+    ({ youngsModulus, poissonsRatio }, index) =>
+      (youngsModulus / (1 - poissonsRatio)) * (strain - (solution.freeStrain[index] ?? 0)),
+  );
+}
+
 /**
  * The laminate at a temperature with its films at their limits: a metal beyond its yield stress flows and keeps the strain
  * (kinematic: on reversal it answers elastically over twice the yield stress); a polymer stops at zero stress and keeps
  * nothing. Solved layer by layer inside the laminate until no stress moves.
- * `metalHistory: false` keeps every metal elastic.
+ * `metalHistory: false` keeps every metal elastic. `heldFlat: true` is for a wafer on tape or frame: its films are stressed as
+ * in a flat stack, while `solution` stays that of the stack let go.
  */
 export function settle(
   state: WaferState,
   orientation: Orientation,
   temperature: number,
-  options: { metalHistory: boolean },
+  options: { metalHistory: boolean; heldFlat: boolean },
 ): Settled {
   const { layers, films } = layersOf(state, orientation, temperature, { carrier: true });
   const given = layers.map((layer) => layer.plasticStrain ?? 0);
   let solution = solveLaminate(layers, { temperature });
+  let stresses = layerStresses(layers, solution, options.heldFlat);
   for (let round = 0; round < MOST_ROUNDS; round++) {
     let moved = 0;
     for (const { film, at } of films) {
       const layer = layers[at];
-      const stress = solution.meanStress[at];
+      const stress = stresses[at];
       if (!layer || stress === undefined) continue;
       const excess = beyondLimit(
         film,
@@ -61,6 +73,7 @@ export function settle(
     }
     if (moved < SETTLED) break;
     solution = solveLaminate(layers, { temperature });
+    stresses = layerStresses(layers, solution, options.heldFlat);
   }
   const after = new Map<FilmState, FilmState>();
   const filmStress = films.map(({ film, at }) => {
@@ -71,7 +84,7 @@ export function settle(
       hottest: Math.max(film.hottest, temperature),
     };
     after.set(film, next);
-    return { film: next, stress: solution.meanStress[at] ?? 0 };
+    return { film: next, stress: stresses[at] ?? 0 };
   });
   const renew = (film: FilmState) => after.get(film) ?? film;
   return {

@@ -98,7 +98,8 @@ function place(layersBottomToTop: readonly Layer[], temperature: number): Placed
   });
 }
 
-function findBase(layers: NamedLayer[]): NamedLayer {
+/** The layer whose flat state is the zero of strain: the first that expands as silicon, else the thickest. */
+export function findBase(layers: NamedLayer[]): NamedLayer {
   const silicon = layers.find(({ layer }) => layer.cte === "silicon");
   if (silicon) return silicon;
   const [first, ...rest] = layers;

@@ -1,9 +1,9 @@
-import { EngineInputError } from "../errors.ts";
 import { requireModulus, requireThickness, requireWithin } from "../inputs.ts";
 import { stoneyStress } from "../stoney/stoney.ts";
 import { combineUncertainty, type CombinedUncertainty } from "../uncertainty/combine.ts";
+import { commonPoints, type ScanPair } from "./common-points.ts";
 import { fitProfile, type ProfileFit } from "./fit-profile.ts";
-import { requirePoints, sortedByPosition, type ProfilePoint } from "./points.ts";
+import type { ProfilePoint } from "./points.ts";
 
 /** Standard uncertainties of the inputs that are not scanned, in their own units. Default 0 each. */
 export interface FilmStressUncertainties {
@@ -66,8 +66,13 @@ export interface FilmStressFromProfiles extends CombinedUncertainty {
   curvatureChange: number;
   /** Pa, tension positive. */
   stress: number;
-  /** Fit of the difference of the two scans. Its `rejected` counts along the first scan within the common range. */
+  /** Both scans at the positions of the first one, within the range that both cover. */
+  pairs: ScanPair[];
+  /** Fit of the difference of the two scans. Its `rejected` counts along `pairs`. */
   difference: ProfileFit;
+  /** Fit of each scan on the points that the difference kept. */
+  before: ProfileFit;
+  after: ProfileFit;
 }
 
 /**
@@ -80,33 +85,29 @@ export interface FilmStressFromProfiles extends CombinedUncertainty {
 export function filmStressFromProfiles(i: FilmStressFromProfilesInput): FilmStressFromProfiles {
   checkMonitor(i);
   const pairs = commonPoints(i.pre, i.post);
-  const options = { edgeExclusion: i.edgeExclusion, robust: i.robust };
   const difference = fitProfile(
     pairs.map(({ x, before, after }) => ({ x, z: after - before })),
-    options,
+    { edgeExclusion: i.edgeExclusion, robust: i.robust },
   );
-  const curvatureChange = changeOfCurvature(pairs, difference, options.edgeExclusion);
+  const rejected = new Set(difference.rejected);
+  const kept = pairs.filter((_, n) => !rejected.has(n));
+  const before = fitProfile(
+    kept.map(({ x, before: z }) => ({ x, z })),
+    { edgeExclusion: i.edgeExclusion },
+  );
+  const after = fitProfile(
+    kept.map(({ x, after: z }) => ({ x, z })),
+    { edgeExclusion: i.edgeExclusion },
+  );
+  // On steep scans curvatures do not subtract like heights, so each scan's own fit counts.
+  const steep = before.steep || after.steep;
+  const curvatureChange = steep ? after.curvature - before.curvature : difference.curvature;
   const film = filmStressFromCurvature({
     ...i,
     curvatureChange,
     curvatureUncertainty: difference.standardUncertainty,
   });
-  return { curvatureChange, difference, ...film };
-}
-
-/** On steep scans curvatures do not subtract like heights, so each scan is fitted on the points that the difference kept. */
-function changeOfCurvature(pairs: readonly ScanPair[], difference: ProfileFit, edgeExclusion: number): number {
-  const rejected = new Set(difference.rejected);
-  const kept = pairs.filter((_, n) => !rejected.has(n));
-  const before = fitProfile(
-    kept.map(({ x, before: z }) => ({ x, z })),
-    { edgeExclusion },
-  );
-  const after = fitProfile(
-    kept.map(({ x, after: z }) => ({ x, z })),
-    { edgeExclusion },
-  );
-  return before.steep || after.steep ? after.curvature - before.curvature : difference.curvature;
+  return { curvatureChange, pairs, difference, before, after, ...film };
 }
 
 function checkMonitor(i: MonitorWafer): void {
@@ -116,31 +117,4 @@ function checkMonitor(i: MonitorWafer): void {
   for (const [name, value] of Object.entries(i.uncertainties ?? {})) {
     if (value !== undefined) requireWithin(`uncertainties.${name}`, value, 0, 1e13, "1");
   }
-}
-
-interface ScanPair {
-  x: number;
-  before: number;
-  after: number;
-}
-
-function commonPoints(pre: readonly ProfilePoint[], post: readonly ProfilePoint[]): ScanPair[] {
-  requirePoints("pre", pre);
-  requirePoints("post", post);
-  const after = sortedByPosition(post);
-  const first = after[0];
-  const last = after.at(-1);
-  const common = first && last ? sortedByPosition(pre).filter(({ x }) => x >= first.x && x <= last.x) : [];
-  if (common.length === 0) throw new EngineInputError("post", "does not overlap the scan before the film");
-  let next = 0;
-  return common.map(({ x, z }) => {
-    while ((after[next]?.x ?? x) < x) next += 1;
-    return { x, before: z, after: interpolate(after[next - 1], after[next], x) };
-  });
-}
-
-function interpolate(low: ProfilePoint | undefined, high: ProfilePoint | undefined, x: number): number {
-  if (!low || high?.x === x) return high?.z ?? 0;
-  if (!high) return low.z;
-  return low.z + ((high.z - low.z) * (x - low.x)) / (high.x - low.x);
 }

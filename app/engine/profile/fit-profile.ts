@@ -4,6 +4,10 @@ import { fitPolynomial } from "./least-squares.ts";
 import { requireEnough, requirePoints, type ProfilePoint } from "./points.ts";
 
 export interface ProfileFit {
+  /** Position of the middle of the fit, m. */
+  centre: number;
+  /** Height of the fitted curve there, m. */
+  offset: number;
   /** 1/m, positive for a bowl (device side up). */
   curvature: number;
   /** Standard uncertainty of the curvature from the scatter about the parabola, 1/m. */
@@ -55,7 +59,7 @@ export function fitProfile(points: readonly ProfilePoint[], o: FitOptions): Prof
   const frame = scanFrame(kept);
   const scaled = kept.map(({ x, z }) => ({ t: (x - frame.centre) / frame.halfWidth, z }));
   const parabola = fitPolynomial(scaled, 2);
-  const [, c1 = 0, c2 = 0] = parabola.coefficients;
+  const [c0 = 0, c1 = 0, c2 = 0] = parabola.coefficients;
   const [, , spread2 = 0] = parabola.spread;
   const slope = c1 / frame.halfWidth;
   const perCoefficient = 2 / frame.halfWidth ** 2 / (1 + slope * slope) ** 1.5;
@@ -63,8 +67,10 @@ export function fitProfile(points: readonly ProfilePoint[], o: FitOptions): Prof
   const scatter = Math.sqrt(squares / (kept.length - 3));
   const steepest = Math.abs(slope) + (2 * Math.abs(c2)) / frame.halfWidth;
   const steep = steepest > STEEP;
-  const curved = steep ? circle(scaled, frame.halfWidth) : { curvature: c2 * perCoefficient, slope };
+  const curved = steep ? circle(scaled, frame.halfWidth) : { curvature: c2 * perCoefficient, slope, offset: c0 };
   const fit: ProfileFit = {
+    centre: frame.centre,
+    offset: curved.offset,
     curvature: curved.curvature,
     standardUncertainty: scatter * spread2 * perCoefficient,
     tilt: Math.atan(curved.slope),
@@ -74,7 +80,7 @@ export function fitProfile(points: readonly ProfilePoint[], o: FitOptions): Prof
     used: kept.length,
     rejected: leftOut(inside, kept),
   };
-  if (![fit.curvature, fit.standardUncertainty, fit.tilt, fit.quartic].every(Number.isFinite)) {
+  if (![fit.offset, fit.curvature, fit.standardUncertainty, fit.tilt, fit.quartic].every(Number.isFinite)) {
     throw new EngineInputError("points", "are too unevenly placed for a curvature");
   }
   return fit;
@@ -160,20 +166,24 @@ function quarticShare(scaled: readonly { t: number; z: number }[], c2: number): 
  * Circle through the scan: the sine of its slope grows by the curvature times the distance. The part of the circle that a
  * parabola misses is taken from the heights and the parabola fitted again, until the two agree.
  */
-function circle(scaled: readonly { t: number; z: number }[], halfWidth: number): { curvature: number; slope: number } {
+function circle(
+  scaled: readonly { t: number; z: number }[],
+  halfWidth: number,
+): { curvature: number; slope: number; offset: number } {
   let [curvature, slope] = [0, 0];
   for (let round = 0; round < 100; round += 1) {
     const rest = scaled.map(({ t, z }) => ({ t, z: z - beyondParabola(t * halfWidth, curvature, slope) }));
-    const [, c1 = 0, c2 = 0] = fitPolynomial(rest, 2).coefficients;
+    const [offset = 0, c1 = 0, c2 = 0] = fitPolynomial(rest, 2).coefficients;
     const nextSlope = c1 / halfWidth;
     const next = (2 * c2) / halfWidth ** 2 / (1 + nextSlope * nextSlope) ** 1.5;
-    if (Math.abs(next - curvature) <= 1e-13 * Math.abs(next)) return { curvature: next, slope: nextSlope };
+    if (Math.abs(next - curvature) <= 1e-13 * Math.abs(next)) return { curvature: next, slope: nextSlope, offset };
     [curvature, slope] = [next, nextSlope];
   }
   throw new EngineInputError("points", "bend too far for a curvature: the scan is close to a quarter turn");
 }
 
-function beyondParabola(x: number, curvature: number, slope: number): number {
+/** Height of a circle over the parabola that touches it at the middle, m, at the distance `x` from there. */
+export function beyondParabola(x: number, curvature: number, slope: number): number {
   const cosine = 1 / Math.sqrt(1 + slope * slope);
   const sine = slope * cosine;
   const sineAt = sine + curvature * x;

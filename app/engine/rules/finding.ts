@@ -1,4 +1,4 @@
-import type { FlowInput, StepInput } from "../flow/model.ts";
+import type { FlowInput } from "../flow/model.ts";
 import type { StepState } from "../flow/walk.ts";
 import type { Outcome } from "../vocabulary.ts";
 import type { UnitSymbol, Working } from "../working.ts";
@@ -58,9 +58,4 @@ export interface Rule {
   asks: string;
   limits: LimitKey[];
   judge(context: RuleContext, state: StepState): Finding[];
-}
-
-/** Name of a step in a sentence: 'step 12, Edge trim'. */
-export function stepName(state: { number: number; step: StepInput }): string {
-  return `step ${state.number}, ${state.step.title}`;
 }

@@ -1,6 +1,7 @@
 import type { StepInput } from "../flow/model.ts";
 import type { WaferState } from "../flow/state.ts";
 import type { SupportClass } from "../vocabulary.ts";
+import { exceeds, reaches } from "./against-limit.ts";
 import type { LimitKey, SiteLimits } from "./limits.ts";
 
 /** Steps that a frame or tape line does on the tape itself, so that the wafer never stands free. */
@@ -22,9 +23,9 @@ export interface RequiredSupport {
 
 /** The limits of the diameter class of a wafer (m): 150, 200 or 300 mm; smaller ones count as 150 mm. Null above 300 mm. */
 export function thicknessLimits(diameter: number): { bare: LimitKey; gripper: LimitKey } | null {
-  if (diameter <= 0.15) return { bare: "bareFrom150", gripper: "gripperFrom150" };
-  if (diameter <= 0.2) return { bare: "bareFrom200", gripper: "gripperFrom200" };
-  if (diameter <= 0.3) return { bare: "bareFrom300", gripper: "gripperFrom300" };
+  if (!exceeds(diameter, 0.15)) return { bare: "bareFrom150", gripper: "gripperFrom150" };
+  if (!exceeds(diameter, 0.2)) return { bare: "bareFrom200", gripper: "gripperFrom200" };
+  if (!exceeds(diameter, 0.3)) return { bare: "bareFrom300", gripper: "gripperFrom300" };
   return null;
 }
 
@@ -34,7 +35,7 @@ export function demandingProcess(step: SupportQuestion, tapeTemperature: number)
   if (step.kind === "pattern") return "lithography";
   if (step.kind === "plate") return "plating";
   if (step.kind === "polish") return "polishing";
-  if (step.peakTemperature > tapeTemperature) return "heat";
+  if (exceeds(step.peakTemperature, tapeTemperature)) return "heat";
   if (step.exposures.includes("plasma")) return "plasma";
   if (step.exposures.includes("vacuum") && step.kind !== "bond") return "vacuum";
   return null;
@@ -56,14 +57,10 @@ export function requiredSupport(
   const byDiameter = thicknessLimits(diameter);
   if (!byDiameter) return null;
   const { bare, gripper } = byDiameter;
-  const at = (key: LimitKey) => limits[key].value;
-  if (thickness >= at(bare))
-    return { support: "bare", because: "the silicon is thick enough", limit: bare, floor: bare };
-  if (thickness >= at(gripper))
-    return { support: "thin-wafer gripper", because: "it is too thin to be lifted bare", limit: bare, floor: gripper };
-  const process = demandingProcess(step, at("tapeTemperature"));
-  if (process && thickness < at("processCarrierBelow")) {
-    if (step.planned === "edge ring" && thickness >= at("edgeRingLeast"))
+  const isAtLeast = (key: LimitKey) => reaches(thickness, limits[key].value);
+  const process = demandingProcess(step, limits.tapeTemperature.value);
+  if (process && !isAtLeast("processCarrierBelow")) {
+    if (step.planned === "edge ring" && isAtLeast("edgeRingLeast"))
       return {
         support: "tape or ring",
         because: "an edge ring takes it",
@@ -73,11 +70,14 @@ export function requiredSupport(
     const because = `${process} on silicon this thin needs a carrier`;
     return { support: "carrier", because, limit: "processCarrierBelow", floor: null };
   }
-  if (thickness >= at("carrierBelow"))
+  if (isAtLeast(bare)) return { support: "bare", because: "the silicon is thick enough", limit: bare, floor: bare };
+  if (isAtLeast(gripper))
+    return { support: "thin-wafer gripper", because: "it is too thin to be lifted bare", limit: bare, floor: gripper };
+  if (isAtLeast("carrierBelow"))
     return { support: "tape or ring", because: "it is too thin for a gripper", limit: gripper, floor: "carrierBelow" };
   if (mount === "film frame" && includes(ON_FRAME, step))
     return { support: "tape or ring", because: "it stays on its frame", limit: "carrierBelow", floor: null };
-  if (mount !== null && includes(TAPE_IN_LINE, step) && thickness >= at("tapeInLineFrom"))
+  if (mount !== null && includes(TAPE_IN_LINE, step) && isAtLeast("tapeInLineFrom"))
     return {
       support: "tape or ring",
       because: "it stays on tape, in line",

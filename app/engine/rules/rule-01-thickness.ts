@@ -2,7 +2,7 @@ import { provenance } from "../measured.ts";
 import { supportClassOf, supportRank, type Outcome } from "../vocabulary.ts";
 import { formatQuantity } from "../units/format.ts";
 import type { StepState } from "../flow/walk.ts";
-import { againstLowerLimit } from "./against-limit.ts";
+import { againstLowerLimit, reaches } from "./against-limit.ts";
 import type { Finding, Rule, RuleContext } from "./finding.ts";
 import { LIMIT_DEFINITIONS, type LimitKey } from "./limits.ts";
 import { requiredSupport, type RequiredSupport } from "./required-support.ts";
@@ -87,10 +87,11 @@ function againstRequired(
       required.limit,
     );
   const tool = equipment?.leastUnsupportedThickness ?? null;
-  if (equipment && tool && planned === "bare" && againstLowerLimit(least, tool.value, 0, "do not run") === "do not run")
+  const onTool = tool && planned === "bare" ? againstLowerLimit(least, tool.value, 0, "needs support") : "clear";
+  if (equipment && tool && onTool !== "clear")
     return {
       ...make(
-        "needs support",
+        onTool,
         `${equipment.name} takes unsupported silicon from ${um(tool.value)}; here it is ${um(least)}.`,
         "Plan support for this step, or use a tool that takes thinner silicon.",
         null,
@@ -132,7 +133,7 @@ function meets(context: RuleContext, state: StepState, required: RequiredSupport
       required.limit,
     );
   const noReserve = supportClassOf(planned) === required.support && required.floor;
-  if (required.floor === "edgeRingLeast" && least < limits.edgeRingFrom.value)
+  if (required.floor === "edgeRingLeast" && !reaches(least, limits.edgeRingFrom.value))
     return make(
       "caution",
       `On an edge ring at ${um(least)}, below ${um(limits.edgeRingFrom.value)}.`,

@@ -5,7 +5,7 @@ import { standardBow } from "../stoney/bow.ts";
 import { formatQuantity, formatWithUncertainty } from "../units/format.ts";
 import type { FaceUp, Outcome } from "../vocabulary.ts";
 import { outcomeRank } from "../vocabulary.ts";
-import { againstUpperLimit } from "./against-limit.ts";
+import { againstUpperLimit, exceeds } from "./against-limit.ts";
 import type { Finding, Rule, RuleContext } from "./finding.ts";
 import { shareBeyond } from "./share-beyond.ts";
 import { warpWorking } from "./warp-working.ts";
@@ -66,7 +66,7 @@ function judge(context: RuleContext, state: StepState): Finding[] {
         remedy: "Choose the tool of this step.",
       },
     ];
-  const judged = found.flatMap((moment) => judgeMoment(context, state, moment) ?? []);
+  const judged = found.map((moment) => judgeMoment(context, state, equipment, moment));
   // Several moments of one step are one finding: the worst, at equal outcome the one nearest its limit.
   judged.sort((a, b) => outcomeRank(b.outcome) - outcomeRank(a.outcome) || use(b) - use(a));
   return judged.slice(0, 1);
@@ -74,41 +74,66 @@ function judge(context: RuleContext, state: StepState): Finding[] {
 
 const use = (finding: Finding) => (finding.figures[0]?.value ?? 0) / (finding.limit?.value ?? Infinity);
 
-function judgeMoment(context: RuleContext, state: StepState, moment: Moment): Finding | null {
-  const { equipment } = state.step;
-  if (!equipment) return null;
+/** How it lies, with its figure: 'edges up 231 ± 4 µm', 'flat, 8 µm'; rolled, it has a radius and an edge lift instead. */
+function inWords({ shape, uncertainty }: Moment, direction: string, flatWithin: number): string {
+  if (shape.regime === "curled" && shape.rollRadius !== null)
+    return `rolls up, radius about ${formatQuantity(shape.rollRadius, "length", { unit: "m", significant: 2 })}, edges lift ${um(shape.warp)}`;
+  const warp = uncertainty
+    ? formatWithUncertainty(shape.warp, 2 * uncertainty, "length", { unit: "µm" })
+    : um(shape.warp);
+  return exceeds(shape.warp, flatWithin) ? `${direction} ${warp}` : `flat, ${warp}`;
+}
+
+function judgeMoment(
+  { limits }: RuleContext,
+  state: StepState,
+  equipment: NonNullable<StepState["step"]["equipment"]>,
+  moment: Moment,
+): Finding {
   const { shape, faceUp, uncertainty } = moment;
   const up = edgesUp(shape, faceUp);
-  const limit = up ? equipment.warpLimitEdgesUp : equipment.warpLimitEdgesDown;
-  if (!limit) return null;
-  const margin = limit.value * context.limits.warpMargin.value;
-  const outcome: Outcome = againstUpperLimit(shape.warp, limit.value, margin, "do not run");
   const direction = up ? "edges up" : "edges down";
-  const lies =
-    shape.regime === "curled" && shape.rollRadius !== null
-      ? `rolls up, radius about ${formatQuantity(shape.rollRadius, "length", { unit: "m", significant: 2 })}, edges lift ${um(shape.warp)}`
-      : `${direction} ${uncertainty ? formatWithUncertainty(shape.warp, 2 * uncertainty, "length", { unit: "µm" }) : um(shape.warp)}`;
-  const share = shareBeyond(shape.warp, uncertainty, limit.value);
+  const lies = capital(inWords(moment, direction, limits.flatWithin.value));
   const when =
     moment.when === "free at peak"
       ? `at ${formatQuantity(shape.temperature, "temperature", { unit: "°C" })}, free`
       : moment.when;
-  return {
+  const found = {
     rule: 2,
     title: TITLE,
     step: state.number,
-    outcome,
-    reason: `${capital(lies)} ${when}; ${equipment.name} takes ${um(limit.value)} ${direction}.${share ? ` ${share}` : ""}`,
     figures: [
       {
         label: `Warp, ${when}`,
         value: shape.warp,
-        unit: "m",
+        unit: "m" as const,
         standardUncertainty: uncertainty,
         working: warpWorking(shape),
       },
-      { label: "Bow, device side up", value: standardBow(shape.sagitta), unit: "m", standardUncertainty: uncertainty },
+      {
+        label: "Bow, device side up",
+        value: standardBow(shape.sagitta),
+        unit: "m" as const,
+        standardUncertainty: uncertainty,
+      },
     ],
+  };
+  const limit = up ? equipment.warpLimitEdgesUp : equipment.warpLimitEdgesDown;
+  if (!limit)
+    return {
+      ...found,
+      outcome: "cannot judge",
+      reason: `${lies} ${when}; ${equipment.name} has no warp limit for ${direction}.`,
+      limit: null,
+      remedy: `Give ${equipment.name} its limit, or choose another tool.`,
+    };
+  const margin = limit.value * limits.warpMargin.value;
+  const outcome: Outcome = againstUpperLimit(shape.warp, limit.value, margin, "do not run");
+  const share = shareBeyond(shape.warp, uncertainty, limit.value);
+  return {
+    ...found,
+    outcome,
+    reason: `${lies} ${when}; ${equipment.name} takes ${um(limit.value)} ${direction}.${share ? ` ${share}` : ""}`,
     limit: { label: `${equipment.name}, ${direction}`, value: limit.value, unit: "m", source: provenance(limit) },
     remedy:
       outcome === "clear"

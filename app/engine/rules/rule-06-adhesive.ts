@@ -2,7 +2,7 @@ import { provenance } from "../measured.ts";
 import type { StepState } from "../flow/walk.ts";
 import { formatQuantity } from "../units/format.ts";
 import type { Outcome } from "../vocabulary.ts";
-import { againstUpperLimit } from "./against-limit.ts";
+import { againstUpperLimit, reaches } from "./against-limit.ts";
 import type { Finding, Rule, RuleContext } from "./finding.ts";
 
 const TITLE = "Bonding material and temperature";
@@ -43,7 +43,8 @@ function judge({ limits }: RuleContext, state: StepState): Finding[] {
     remedy,
   });
   const findings = [againstTemperatureLimit(peak, material.name, material.temperatureLimit.value, margin, make)];
-  if (material.softening && peak >= material.softening.value) findings.push(aboveSoftening(state, material, make));
+  if (material.softening && reaches(peak, material.softening.value))
+    findings.push(aboveSoftening(state, material, make));
   return findings;
 }
 

@@ -1,11 +1,15 @@
 import type { StepState } from "../flow/walk.ts";
 import { allFilms } from "../flow/state.ts";
 import { formatQuantity } from "../units/format.ts";
+import type { Outcome } from "../vocabulary.ts";
+import { againstUpperLimit, exceeds } from "./against-limit.ts";
 import type { Finding, Rule, RuleContext } from "./finding.ts";
 
 const TITLE = "Order of the steps";
 
 interface Fault {
+  /** default: do not run */
+  outcome?: Outcome;
   reason: string;
   remedy: string;
 }
@@ -17,7 +21,7 @@ const mm = (value: number) => formatQuantity(value, "length", { unit: "mm" });
 type Check = (state: StepState, context: RuleContext) => Fault | null;
 
 const growsSilicon: Check = ({ step, before }) =>
-  step.siliconAfter && step.siliconAfter.value > before.silicon.value
+  step.siliconAfter && exceeds(step.siliconAfter.value, before.silicon.value)
     ? {
         reason: `It should leave ${um(step.siliconAfter.value)} of silicon, but only ${um(before.silicon.value)} are there.`,
         remedy: "Give the silicon that remains after the step, at most what is there before it.",
@@ -66,7 +70,7 @@ const plannedMountMissing: Check = ({ step, after }) =>
   after.mount !== step.planned &&
   !after.bond
     ? {
-        reason: `A ${step.planned} is planned, but the wafer was not put on one.`,
+        reason: `${step.planned === "edge ring" ? "An" : "A"} ${step.planned} is planned, but the wafer was not put on one.`,
         remedy: step.planned === "grinding tape" ? "Laminate the tape before this step." : "Mount it before this step.",
       }
     : null;
@@ -79,26 +83,40 @@ const dicesUnmounted: Check = ({ step, before }) =>
       }
     : null;
 
+/** Work on a whole wafer. */
+const WHOLE_WAFER = [
+  "deposit",
+  "cure",
+  "anneal",
+  "pattern",
+  "plate",
+  "reflow",
+  "edge trim",
+  "bond",
+  "grind",
+  "stress relief",
+  "polish",
+  "via reveal",
+  "back-side film",
+];
+
 const worksAfterDicing: Check = ({ step, before }) =>
-  before.diced && ["grind", "bond", "pattern", "plate", "deposit", "cure"].includes(step.kind)
+  before.diced && WHOLE_WAFER.includes(step.kind)
     ? { reason: "The wafer is already diced here.", remedy: "Move this step before dicing." }
     : null;
 
-const heatsTape: Check = ({ step, before, after }, { limits }) => {
-  const mount = after.mount ?? before.mount;
-  if (!mount || mount === "edge ring" || after.bond) return null;
+/** The heat of a debond is judged by the debond rule. An edge ring has no tape under the wafer. */
+const heatsTape: Check = ({ step, after: { mount } }, { limits }) => {
+  if (!mount || mount === "edge ring" || step.kind === "debond") return null;
   const limit = limits.tapeTemperature.value;
-  const hot = step.peakTemperature > limit;
+  const outcome = againstUpperLimit(step.peakTemperature, limit, 0, "do not run");
   const vacuum = step.exposures.includes("vacuum") || step.exposures.includes("plasma");
-  if (!hot && !vacuum) return null;
+  if (outcome === "clear" && !vacuum) return null;
   const at = formatQuantity(step.peakTemperature, "temperature", { unit: "°C", decimals: 0 });
   const most = formatQuantity(limit, "temperature", { unit: "°C", decimals: 0 });
-  return {
-    reason: hot
-      ? `It is on ${mount}, which takes ${most}; the step reaches ${at}.`
-      : `It is on ${mount}, which does not go into vacuum or plasma.`,
-    remedy: "Take the tape off before heat and vacuum, or plan a carrier for this step.",
-  };
+  const remedy = "Take the tape off before heat and vacuum, or plan a carrier for this step.";
+  if (vacuum) return { reason: `It is on ${mount}, which does not go into vacuum or plasma.`, remedy };
+  return { outcome, reason: `It is on ${mount}, which takes ${most}; the step reaches ${at}.`, remedy };
 };
 
 const trimsAfterGrinding: Check = ({ step, before }) =>
@@ -110,10 +128,12 @@ const trimsAfterGrinding: Check = ({ step, before }) =>
     : null;
 
 const removesWhatIsNotThere: Check = ({ step, before }) => {
-  const missing = step.removes.find(
-    ({ side, filmId }) =>
-      !allFilms(before).some(({ addition }) => addition.side === side && addition.film.id === filmId),
-  );
+  const left = allFilms(before).map(({ addition }) => addition);
+  const missing = step.removes.find(({ side, filmId }) => {
+    const at = left.findIndex((addition) => addition.side === side && addition.film.id === filmId);
+    if (at >= 0) left.splice(at, 1);
+    return at < 0;
+  });
   return missing
     ? {
         reason: `It removes ${missing.filmName} from the ${missing.side} side, where there is none.`,
@@ -126,12 +146,12 @@ const doesNotFitTool: Check = ({ step, after }, { flow }) => {
   if (!step.equipment) return null;
   const most = step.equipment.largestDiameter.value;
   const carrier = after.bond?.carrier;
-  if (carrier && carrier.diameter > most)
+  if (carrier && exceeds(carrier.diameter, most))
     return {
       reason: `${carrier.name} measures ${mm(carrier.diameter)}; ${step.equipment.name} takes ${mm(most)}.`,
       remedy: "Choose a carrier or a tool of the same size.",
     };
-  if (flow.wafer.diameter > most)
+  if (exceeds(flow.wafer.diameter, most))
     return {
       reason: `The wafer measures ${mm(flow.wafer.diameter)}; ${step.equipment.name} takes ${mm(most)}.`,
       remedy: "Choose a tool for this wafer size.",
@@ -140,7 +160,7 @@ const doesNotFitTool: Check = ({ step, after }, { flow }) => {
 };
 
 const carrierTooSmall: Check = ({ step }, { flow }) =>
-  step.kind === "bond" && step.bond && step.bond.carrier.diameter < flow.wafer.diameter
+  step.kind === "bond" && step.bond && exceeds(flow.wafer.diameter, step.bond.carrier.diameter)
     ? {
         reason: `${step.bond.carrier.name} measures ${mm(step.bond.carrier.diameter)}, less than the ${mm(flow.wafer.diameter)} wafer: the edge would hang free.`,
         remedy: "Choose a carrier at least as large as the wafer.",
@@ -184,7 +204,7 @@ function finding(state: StepState, outcome: Finding["outcome"], reason: string, 
 
 function judge(context: RuleContext, state: StepState): Finding[] {
   const faults = CHECKS.flatMap((check) => check(state, context) ?? []);
-  const findings = faults.map(({ reason, remedy }) => finding(state, "do not run", reason, remedy));
+  const findings = faults.map(({ outcome = "do not run", reason, remedy }) => finding(state, outcome, reason, remedy));
   const clean = cleanAfterDebond(context, state);
   if (clean) findings.push(clean);
   if (findings.length === 0 && ["debond", "dice", "bond"].includes(state.step.kind))

@@ -1,5 +1,4 @@
 import { requireWithin } from "../inputs.ts";
-import type { SourceId } from "../sources.ts";
 
 /** Stiffness of cubic silicon along its cube axes. */
 export interface CubicStiffness {
@@ -18,8 +17,6 @@ const AT_25C: CubicStiffness = { c11: 165.64e9, c12: 63.94e9, c44: 79.51e9 };
 const PER_KELVIN: CubicStiffness = { c11: -9.4e-5, c12: -9.8e-5, c44: -8.3e-5 };
 
 const REFERENCE_TEMPERATURE = 298.15;
-
-export const SILICON_STIFFNESS_SOURCE: SourceId = "silicon-properties-note";
 
 /**
  * Elastic constants of silicon, Pa, at `temperature` (K, default 298.15), linear in temperature from the values at 25 °C.

@@ -10,6 +10,9 @@ import { stoneyCurvature } from "../stoney/stoney.ts";
 import { laminateOfStack } from "./laminate-of-stack.ts";
 import type { StackFilm, StackInput } from "./model.ts";
 
+/** A stack as a disc that bends alike in both directions. */
+export type StackDisc = FreeWaferShapeInput & { linearCurvature: number };
+
 /** What a free wafer with this stack does. Sagittas have the sign of the curvature. */
 export interface StackEstimate {
   /** thin-film formula, films summed, parabola */
@@ -17,26 +20,20 @@ export interface StackEstimate {
   /** laminate theory, small deflections, parabola */
   laminate: LaminateResult & { sagitta: number };
   shape: FreeWaferShape;
-  disc: FreeWaferShapeInput;
+  disc: StackDisc;
   /** σ·h·coverage of each side at the temperature, N/m, tension positive */
   filmForce: { front: number; back: number };
 }
 
-/** Stress of a film on thick silicon at a temperature (K), Pa: its own and what expansion has added since its reference. */
-function stressAt(film: StackFilm, temperature: number): number {
-  const reference = film.referenceTemperature ?? ROOM_TEMPERATURE;
-  if (film.expansion === undefined || temperature === reference) return film.stress;
-  const { youngsModulus, poissonsRatio, expansion } = film;
-  return (
-    film.stress +
-    mismatchStress({
-      youngsModulus,
-      poissonsRatio,
-      cte: expansion,
-      from: reference,
-      to: temperature,
-    })
-  );
+/**
+ * Stress of a film on thick silicon at a temperature (K) times the area that it covers, Pa: its own and what expansion has
+ * added since its reference. This, on the film's thickness, is what pulls.
+ */
+export function coveredStress(film: StackFilm, temperature: number): number {
+  const { youngsModulus, poissonsRatio, expansion, coverage = 1, referenceTemperature: from = ROOM_TEMPERATURE } = film;
+  if (expansion === undefined || temperature === from) return film.stress * coverage;
+  const thermal = mismatchStress({ youngsModulus, poissonsRatio, cte: expansion, from, to: temperature });
+  return (film.stress + thermal) * coverage;
 }
 
 /**
@@ -47,12 +44,12 @@ export function estimateStack(stack: StackInput): StackEstimate {
   const { wafer, films } = stack;
   const temperature = stack.temperature ?? ROOM_TEMPERATURE;
   const radius = wafer.diameter / 2;
-  const solved = solveLaminate(laminateOfStack(stack), { temperature });
+  const { laminate, disc } = freeDisc(stack);
   const biaxialModulus = siliconBiaxialModulus(wafer.orientation);
   const force = { front: 0, back: 0 };
   let curvature = 0;
   for (const film of films) {
-    const stress = stressAt(film, temperature) * (film.coverage ?? 1);
+    const stress = coveredStress(film, temperature);
     const bend = stoneyCurvature({
       filmStress: stress,
       filmThickness: film.thickness,
@@ -62,18 +59,27 @@ export function estimateStack(stack: StackInput): StackEstimate {
     curvature += film.side === "front" ? bend : -bend;
     force[film.side] += filmForce({ stress, thickness: film.thickness });
   }
-  const disc: FreeWaferShapeInput = {
-    ...siliconPlateConstants(wafer.orientation),
-    radius,
-    thickness: solved.effectiveThickness,
-    linearCurvature: solved.curvature,
-    crystal: wafer.orientation,
-  };
   return {
     stoney: { curvature, sagitta: bowFromCurvature({ curvature, radius }) },
-    laminate: { ...solved, sagitta: bowFromCurvature({ curvature: solved.curvature, radius }) },
+    laminate: { ...laminate, sagitta: bowFromCurvature({ curvature: laminate.curvature, radius }) },
     shape: freeWaferShape(disc),
     disc,
     filmForce: force,
+  };
+}
+
+/** The stack as a laminate at its temperature, and the free disc that stands for it. */
+export function freeDisc(stack: StackInput): { laminate: LaminateResult; disc: StackDisc } {
+  const { wafer, temperature = ROOM_TEMPERATURE } = stack;
+  const laminate = solveLaminate(laminateOfStack(stack), { temperature });
+  return {
+    laminate,
+    disc: {
+      ...siliconPlateConstants(wafer.orientation),
+      radius: wafer.diameter / 2,
+      thickness: laminate.effectiveThickness,
+      linearCurvature: laminate.curvature,
+      crystal: wafer.orientation,
+    },
   };
 }

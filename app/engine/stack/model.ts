@@ -30,3 +30,8 @@ export interface StackInput {
   /** K, default 298.15 */
   temperature?: number | undefined;
 }
+
+/** The same films on silicon of another thickness (m). */
+export function withThickness(stack: StackInput, thickness: number): StackInput {
+  return { ...stack, wafer: { ...stack.wafer, thickness } };
+}

@@ -1,7 +1,8 @@
 import { EngineInputError } from "../errors.ts";
+import { criticalLinearCurvature } from "../plate/critical-load.ts";
 import type { ShapeRegime } from "../vocabulary.ts";
-import { estimateStack } from "./estimate-stack.ts";
-import type { StackInput } from "./model.ts";
+import { estimateStack, freeDisc } from "./estimate-stack.ts";
+import { withThickness, type StackInput } from "./model.ts";
 
 /** One point of the curve warp against remaining silicon. */
 export interface SweepPoint {
@@ -11,11 +12,6 @@ export interface SweepPoint {
   linearWarp: number;
   regime: ShapeRegime;
 }
-
-const withThickness = (stack: StackInput, thickness: number): StackInput => ({
-  ...stack,
-  wafer: { ...stack.wafer, thickness },
-});
 
 /**
  * Warp of the free wafer over a range of silicon thickness (m), at `points` thicknesses spaced evenly on a logarithmic scale.
@@ -35,17 +31,35 @@ export function thicknessSweep(stack: StackInput, range: { from: number; to: num
 }
 
 const THINNEST = 1e-6;
-const HALVINGS = 60;
+/** Ratio of neighbouring thicknesses at which the load is looked at from the thick end. */
+const STRIDE = 1.04;
+const HALVINGS = 50;
 
 /**
- * Thickness below which the free wafer rolls about one axis, m, between 1 µm and `upTo`; null when it does not roll in that
- * range. The load falls steadily with thickness, so one root is all there is.
+ * Thickness of silicon below which the free wafer rolls about one axis, m, between 1 µm and `upTo`; `upTo` when it rolls even
+ * there, null when it does not roll in that range.
+ *
+ * The search comes from the thick end and stops at the first thickness that rolls: films that balance each other at one
+ * thickness only can leave a flat stretch further down, and the limit above it is the one that matters.
  */
 export function curlingThickness(stack: StackInput, upTo: number): number | null {
-  const rolls = (thickness: number) => estimateStack(withThickness(stack, thickness)).shape.stabilityRatio > 1;
-  if (!rolls(THINNEST)) return null;
+  const rolls = (thickness: number) => {
+    const { disc } = freeDisc(withThickness(stack, thickness));
+    return Math.abs(disc.linearCurvature) > criticalLinearCurvature(disc);
+  };
   if (rolls(upTo)) return upTo;
-  let [low, high] = [THINNEST, upTo];
+  let stable = upTo;
+  while (stable > THINNEST) {
+    const next = Math.max(THINNEST, stable / STRIDE);
+    if (rolls(next)) return boundary(rolls, next, stable);
+    stable = next;
+  }
+  return null;
+}
+
+/** Where `rolls` changes between a thickness that does and a thicker one that does not. */
+function boundary(rolls: (thickness: number) => boolean, rolling: number, stable: number): number {
+  let [low, high] = [rolling, stable];
   for (let halving = 0; halving < HALVINGS; halving++) {
     const middle = Math.sqrt(low * high);
     if (rolls(middle)) low = middle;

@@ -10,6 +10,9 @@ import type { Route } from "./+types/layout";
 
 export const middleware: Route.MiddlewareFunction[] = [signedIn];
 
+/** Title of what has none of its own: a refusal inside. */
+export const meta: Route.MetaFunction = () => [{ title: "Planeward" }];
+
 export function loader({ context }: Route.LoaderArgs) {
   const { actor } = scopeOf(context);
   return { person: { name: actor.name, role: roleInWords(actor) }, places: placesFor(actor) };

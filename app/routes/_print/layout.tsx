@@ -1,9 +1,24 @@
-import { Outlet } from "react-router";
+import { isRouteErrorResponse, Outlet } from "react-router";
+import { ErrorPage } from "#app/components/layout/ErrorPage.tsx";
+import { signedIn } from "#app/middleware/signed-in.server.ts";
+import { scopeOf } from "#app/server/contexts.server.ts";
+import type { Route } from "./+types/layout";
 
-export function loader() {
-  return null;
+export const middleware: Route.MiddlewareFunction[] = [signedIn];
+
+/** A layout without a loader would let a navigation in the browser pass the door. */
+export function loader({ context }: Route.LoaderArgs) {
+  return { reader: scopeOf(context).actor.name };
 }
 
-export default function Layout() {
+export default function PrintLayout() {
   return <Outlet />;
+}
+
+export function ErrorBoundary({ error }: Route.ErrorBoundaryProps) {
+  return (
+    <main className="mx-auto max-w-page p-6">
+      <ErrorPage status={isRouteErrorResponse(error) ? error.status : 500} error={error} />
+    </main>
+  );
 }

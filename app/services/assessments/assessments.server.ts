@@ -1,22 +1,19 @@
-import { createHash, randomUUID } from "node:crypto";
+import { randomUUID } from "node:crypto";
 import type { EntityManager } from "@mikro-orm/postgresql";
 import { Assessment } from "#app/db/entities/assessment.ts";
 import { EngineInputError } from "#app/engine/errors.ts";
 import { assessFlow } from "#app/engine/flow/assess.ts";
 import { ENGINE_VERSION } from "#app/engine/version.ts";
-import type { Outcome } from "#app/engine/vocabulary.ts";
-import { PAGE_SIZE, type ListPage, type ListParams } from "#app/lib/list-params.ts";
 import { mayInProgram } from "#app/policies/permissions.ts";
 import type { AssessmentResult } from "#app/schemas/assessment-result.ts";
 import { notFound } from "#app/server/problem.server.ts";
 import { inScope, type ActorScope } from "#app/server/scope.server.ts";
-import { flowInputOf } from "../flows/flow-detail.ts";
+import { flowInputOf, type FlowDetail } from "../flows/flow-detail.ts";
 import { readFlow } from "../flows/read-flow.server.ts";
-import { escapeLike } from "../like.server.ts";
 import { readLimits } from "../limits.server.ts";
 import { requireInProgram } from "../permission.server.ts";
-import { programFilter } from "../program-filter.server.ts";
 import { idFrom } from "../uuid.server.ts";
+import { inputHash } from "./input-hash.server.ts";
 import { resultOf } from "./result-of.ts";
 
 /** What running an assessment came to: the stored one, or the sentence that says why nothing could be computed. */
@@ -36,20 +33,19 @@ export async function runAssessment(scope: ActorScope, flowId: string): Promise<
     const input = { flow: flowInputOf(flow), limits: await readLimits(em) };
     let result: AssessmentResult;
     try {
-      result = resultOf(input.flow, assessFlow(input.flow, input.limits));
+      result = resultOf(input.flow, input.limits, assessFlow(input.flow, input.limits));
     } catch (error) {
       if (error instanceof EngineInputError) return notComputable(error);
       throw error;
     }
-    const newest = await em.findOne(Assessment, { flow: flow.id }, { orderBy: { number: "desc" }, fields: ["number"] });
     const created = em.create(Assessment, {
       id: randomUUID(),
       program: flow.program.id,
       flow: flow.id,
-      number: (newest?.number ?? 0) + 1,
+      ...(await nextNumbers(em, flow)),
       flowName: flow.name,
       engineVersion: ENGINE_VERSION,
-      inputHash: createHash("sha256").update(JSON.stringify(input)).digest("hex"),
+      inputHash: inputHash(input),
       input,
       result,
       outcome: result.verdict.outcome,
@@ -59,6 +55,23 @@ export async function runAssessment(scope: ActorScope, flowId: string): Promise<
     await em.flush();
     return { outcome: "stored", id: created.id };
   });
+}
+
+/** Runs an assessment's flow again, as the flow is now. */
+export async function runAgain(scope: ActorScope, assessmentId: string | undefined): Promise<Ran> {
+  const flowId = await inScope(scope, async (em) => (await findAssessment(em, scope, assessmentId)).flow.id);
+  return runAssessment(scope, flowId);
+}
+
+/** The numbers after the newest ones of flow and program. Two people who run at once wait for each other until the end. */
+async function nextNumbers(em: EntityManager, { id, program }: Pick<FlowDetail, "id" | "program">) {
+  await em.execute("select pg_advisory_xact_lock(hashtextextended(?, 0))", [`assessment numbers of ${program.id}`]);
+  const [newest] = await em.execute<{ number: number; document: number }[]>(
+    `select coalesce(max(number) filter (where flow_id = ?), 0) as number, coalesce(max(document_number), 0) as document
+       from assessment where program_id = ?`,
+    [id, program.id],
+  );
+  return { number: (newest?.number ?? 0) + 1, documentNumber: (newest?.document ?? 0) + 1 };
 }
 
 /** `steps[3].siliconAfter` names step 4 to people. */
@@ -74,7 +87,10 @@ function notComputable({ field, reason, allowed }: EngineInputError): Ran {
 
 export interface AssessmentDetail {
   id: string;
+  /** counts within the flow */
   number: number;
+  /** counts within the program, for the document's number */
+  documentNumber: number;
   flow: { id: string; name: string };
   program: { id: string; name: string; slug: string };
   engineVersion: string;
@@ -82,7 +98,7 @@ export interface AssessmentDetail {
   createdAt: string;
   createdBy: string;
   result: AssessmentResult;
-  /** the flow has been changed since: what stands here is of then */
+  /** the flow, or something that it uses, has been changed since: what stands here is of then */
   outOfDate: boolean;
   mayAssess: boolean;
 }
@@ -103,9 +119,11 @@ export async function getAssessment(scope: ActorScope, id: string | undefined): 
   return inScope(scope, async (em) => {
     const assessment = await findAssessment(em, scope, id);
     const { program, flow } = assessment;
+    const now = { flow: flowInputOf(await readFlow(em, scope, flow.id)), limits: await readLimits(em) };
     return {
       id: assessment.id,
       number: assessment.number,
+      documentNumber: assessment.documentNumber,
       flow: { id: flow.id, name: assessment.flowName },
       program: { id: program.id, name: program.name, slug: program.slug },
       engineVersion: assessment.engineVersion,
@@ -113,66 +131,8 @@ export async function getAssessment(scope: ActorScope, id: string | undefined): 
       createdAt: assessment.createdAt.toISOString(),
       createdBy: assessment.createdBy.name,
       result: assessment.result,
-      outOfDate: flow.updatedAt > assessment.createdAt,
+      outOfDate: inputHash(now) !== assessment.inputHash,
       mayAssess: mayInProgram(scope.actor, "run assessments", program.id),
     };
-  });
-}
-
-export const ASSESSMENT_SORTS = ["run", "flow", "outcome"] as const;
-
-export interface AssessmentRow {
-  id: string;
-  number: number;
-  flow: string;
-  program: string;
-  outcome: Outcome;
-  sentence: string;
-  createdAt: string;
-  createdBy: string;
-  outOfDate: boolean;
-}
-
-/** A page of the assessments that the person may see, newest first unless asked otherwise. */
-export async function listAssessments(
-  scope: ActorScope,
-  params: ListParams,
-  flowId?: string,
-): Promise<ListPage<AssessmentRow>> {
-  return inScope(scope, async (em) => {
-    const direction = params.descending ? "desc" : "asc";
-    const [assessments, total] = await em.findAndCount(
-      Assessment,
-      {
-        program: programFilter(scope.actor, "see the work", params.filters["program"]),
-        ...(flowId ? { flow: flowId } : {}),
-        ...(params.query ? { flowName: { $ilike: `%${escapeLike(params.query)}%` } } : {}),
-      },
-      {
-        populate: ["program", "createdBy", "flow"],
-        orderBy: [
-          params.sort === "flow"
-            ? { flowName: direction }
-            : params.sort === "outcome"
-              ? { outcome: direction }
-              : { createdAt: params.descending ? "asc" : "desc" },
-          { id: "asc" },
-        ],
-        limit: PAGE_SIZE,
-        offset: (params.page - 1) * PAGE_SIZE,
-      },
-    );
-    const rows = assessments.map((assessment): AssessmentRow => ({
-      id: assessment.id,
-      number: assessment.number,
-      flow: assessment.flowName,
-      program: assessment.program.name,
-      outcome: assessment.outcome,
-      sentence: assessment.result.sentences.join(" "),
-      createdAt: assessment.createdAt.toISOString(),
-      createdBy: assessment.createdBy.name,
-      outOfDate: assessment.flow.updatedAt > assessment.createdAt,
-    }));
-    return { rows, total, params };
   });
 }

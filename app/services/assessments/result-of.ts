@@ -2,12 +2,14 @@ import { answerSentences } from "#app/engine/flow/answer.ts";
 import type { AssessedStep, FlowAssessment } from "#app/engine/flow/assess.ts";
 import type { FlowInput } from "#app/engine/flow/model.ts";
 import { edgesUp, type LyingShape } from "#app/engine/flow/shape.ts";
+import type { SiteLimits } from "#app/engine/rules/limits.ts";
+import { warpWorking } from "#app/engine/rules/warp-working.ts";
 import { standardBow } from "#app/engine/stoney/bow.ts";
 import type { FaceUp } from "#app/engine/vocabulary.ts";
 import type { AssessmentResult, BondResult, ShapeResult, StepResult } from "#app/schemas/assessment-result.ts";
 
 /** The engine's answer in the form in which it is stored: plain, with the standard bow. */
-export function resultOf(flow: FlowInput, assessment: FlowAssessment): AssessmentResult {
+export function resultOf(flow: FlowInput, limits: SiteLimits, assessment: FlowAssessment): AssessmentResult {
   const { name, diameter, orientation, thickness } = flow.wafer;
   return {
     wafer: { name, diameter, orientation, thickness: thickness.value },
@@ -16,7 +18,9 @@ export function resultOf(flow: FlowInput, assessment: FlowAssessment): Assessmen
     steps: assessment.steps.map(stepResult),
     findings: assessment.findings,
     assumed: assessment.assumed,
+    inputs: assessment.inputs,
     bonds: bondsOf(assessment.steps),
+    tapeTemperature: limits.tapeTemperature.value,
   };
 }
 
@@ -24,7 +28,10 @@ const shownContributions = 6;
 
 function stepResult({ state, required, outcome, uncertainty, budget }: AssessedStep): StepResult {
   const { step, before, after } = state;
-  const shape = (lying: LyingShape | null, u: number | null, faceUp: FaceUp) => lying && shapeResult(lying, u, faceUp);
+  const shape = (lying: LyingShape | null, u: number | null) =>
+    lying && { ...shapeResult(lying, u, after.faceUp), working: warpWorking(lying) };
+  // Nothing holds a bare wafer: let go, it lies as it does.
+  const held = step.planned !== "bare";
   return {
     number: state.number,
     kind: step.kind,
@@ -40,21 +47,29 @@ function stepResult({ state, required, outcome, uncertainty, budget }: AssessedS
     siliconBefore: before.silicon.value,
     silicon: after.silicon.value,
     siliconLeast: after.silicon.value - (after.silicon.tolerance ?? 0),
+    siliconTolerance: after.silicon.tolerance,
     planned: step.planned,
     plannedName: step.planned === "carrier" && after.bond ? after.bond.carrier.name : step.planned,
     required: required ?? "none fits",
     faceUp: after.faceUp,
     lies: state.lies,
-    atRoom: shape(state.atRoom, uncertainty.atRoom, after.faceUp),
-    atPeak: shape(state.atPeak, uncertainty.atPeak, after.faceUp),
-    released: shapeResult(state.released, null, "device side"),
+    atRoom: shape(state.atRoom, uncertainty.atRoom),
+    atPeak: shape(state.atPeak, uncertainty.atPeak),
+    released: {
+      ...shapeResult(state.released, null, "device side"),
+      working: held ? warpWorking(state.released) : null,
+    },
     filmForce: state.filmForce,
     outcome,
     budget: budget.slice(0, shownContributions),
   };
 }
 
-function shapeResult(lying: LyingShape, standardUncertainty: number | null, faceUp: FaceUp): ShapeResult {
+function shapeResult(
+  lying: LyingShape,
+  standardUncertainty: number | null,
+  faceUp: FaceUp,
+): Omit<ShapeResult, "working"> {
   return {
     temperature: lying.temperature,
     bow: standardBow(lying.sagitta),
@@ -86,6 +101,7 @@ function bondsOf(steps: AssessedStep[]): BondResult[] {
         material: bond.material.name,
         thickness: bond.thickness.value,
         temperatureLimit: bond.material.temperatureLimit.value,
+        flowsFrom: bond.material.flows ? (bond.material.softening?.value ?? null) : null,
         release: bond.material.release,
       };
       bonds.push(open);

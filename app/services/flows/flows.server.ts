@@ -8,14 +8,14 @@ import type { FlowValues } from "#app/schemas/flow.ts";
 import { notFound, problem } from "#app/server/problem.server.ts";
 import { inScope, type ActorScope } from "#app/server/scope.server.ts";
 import { escapeLike } from "../like.server.ts";
-import { requireInProgram } from "../permission.server.ts";
+import { requireInProgram, requireInSomeProgram } from "../permission.server.ts";
 import { programFilter } from "../program-filter.server.ts";
-import { conflictOf, newRecord, saving, touch, type Saved } from "../record.server.ts";
+import { conflictOf, saving, touch, type Saved } from "../record.server.ts";
 import { idFrom } from "../uuid.server.ts";
 import type { FlowDetail } from "./flow-detail.ts";
 import { findFlow, readFlow } from "./read-flow.server.ts";
 
-export const FLOW_SORTS = ["updated", "name", "program"] as const;
+export const FLOW_SORTS = ["updated", "name", "program", "diameter"] as const;
 
 export interface FlowRow {
   id: string;
@@ -29,6 +29,7 @@ export interface FlowRow {
 
 /** A page of the flows that the person may see, each with its newest assessment. */
 export async function listFlows(scope: ActorScope, params: ListParams): Promise<ListPage<FlowRow>> {
+  requireInSomeProgram(scope, "see the work");
   return inScope(scope, async (em) => {
     const direction = params.descending ? "desc" : "asc";
     const [flows, total] = await em.findAndCount(
@@ -44,7 +45,9 @@ export async function listFlows(scope: ActorScope, params: ListParams): Promise<
             ? { name: direction }
             : params.sort === "program"
               ? { program: { name: direction } }
-              : { updatedAt: params.descending ? "asc" : "desc" },
+              : params.sort === "diameter"
+                ? { silicon: { diameter: direction } }
+                : { updatedAt: direction },
           { id: "asc" },
         ],
         limit: PAGE_SIZE,
@@ -83,30 +86,26 @@ export async function getFlow(scope: ActorScope, id: string | undefined): Promis
   return inScope(scope, (em) => readFlow(em, scope, idFrom(id, "flow")));
 }
 
-/** Adds a flow or changes its head: name, silicon, incoming thickness. */
-export async function saveFlow(
+/** Changes a flow's head: name, silicon, incoming thickness, note. Its program stays. */
+export async function changeFlow(
   scope: ActorScope,
-  { id, version, values }: { id: string | null; version: number | null; values: FlowValues },
+  { id, version, values }: { id: string; version: number | null; values: FlowValues },
 ): Promise<Saved> {
   return saving(() =>
     inScope(scope, async (em): Promise<Saved> => {
-      const flow = id === null ? null : await findFlow(em, scope, id);
-      const programId = flow?.program.id ?? values.program;
-      requireInProgram(scope, "edit stacks and flows", programId, id === null ? "program" : "flow");
-      const conflict = flow && conflictOf(flow, version);
+      const flow = await findFlow(em, scope, id);
+      requireInProgram(scope, "edit stacks and flows", flow.program.id, "flow");
+      const conflict = conflictOf(flow, version);
       if (conflict) return { outcome: "conflict", conflict };
-      const namesake = await em.findOne(Flow, { program: programId, name: values.name });
+      const namesake = await em.findOne(Flow, { program: flow.program.id, name: values.name });
       if (namesake && namesake.id !== id) return { outcome: "name taken" };
       const silicon = await em.findOne(Silicon, { id: values.silicon });
       if (!silicon) throw notFound("silicon wafer");
-      const columns = { name: values.name, note: values.note, silicon, incomingThickness: values.incomingThickness };
-      const saved = flow ?? em.create(Flow, { ...newRecord(scope), program: programId, ...columns });
-      if (flow) {
-        em.assign(flow, columns);
-        touch(flow, scope);
-      }
+      const { name, note, incomingThickness } = values;
+      em.assign(flow, { name, note, silicon, incomingThickness }, { mergeObjectProperties: false });
+      touch(flow, scope);
       await em.flush();
-      return { outcome: "saved", id: saved.id };
+      return { outcome: "saved", id };
     }),
   );
 }

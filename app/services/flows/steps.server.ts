@@ -31,6 +31,11 @@ async function openFlow(em: EntityManager, scope: ActorScope, { flowId, version 
   return { flow, steps, conflict: conflictOf(flow, version) };
 }
 
+function requireRoom(steps: FlowStep[]): void {
+  if (steps.length >= MOST_STEPS)
+    throw problem(400, `A flow holds at most ${MOST_STEPS} steps. Split it into two flows.`);
+}
+
 /** Adds a step before `position` (from 0), or changes the one named. */
 export async function saveStep(
   scope: ActorScope,
@@ -43,15 +48,12 @@ export async function saveStep(
       if (conflict) return { outcome: "conflict", conflict };
       const known = steps.find(({ id }) => id === place.stepId) ?? null;
       if (place.stepId !== null && !known) throw notFound("step");
-      if (!known && steps.length >= MOST_STEPS)
-        throw problem(400, `A flow holds at most ${MOST_STEPS} steps. Split it into two flows.`);
-      const columns = await stepColumns(em, values);
-      const step =
-        known ??
-        em.create(FlowStep, { id: randomUUID(), program: flow.program, flow, position: steps.length, ...columns });
-      if (known) em.assign(known, columns, { mergeObjectProperties: false });
-      else renumber([...steps.slice(0, place.position), step, ...steps.slice(place.position)]);
-      await replaceFilms(em, flow, step, values.films);
+      if (!known) requireRoom(steps);
+      const step = known ?? (await addStep(em, flow, steps.length, values));
+      if (known) {
+        em.assign(known, await stepColumns(em, values), { mergeObjectProperties: false });
+        await replaceFilms(em, flow, known, values.films);
+      } else renumber([...steps.slice(0, place.position), step, ...steps.slice(place.position)]);
       touch(flow, scope);
       await em.flush();
       return { outcome: "saved", id: step.id };
@@ -59,9 +61,18 @@ export async function saveStep(
   );
 }
 
-export type StepMove = "up" | "down" | "remove" | "copy";
+/** Creates a step at a position that the caller keeps free. */
+export async function addStep(em: EntityManager, flow: Flow, position: number, values: StepValues): Promise<FlowStep> {
+  const columns = await stepColumns(em, values);
+  const step = em.create(FlowStep, { id: randomUUID(), program: flow.program, flow, position, ...columns });
+  await addFilms(em, flow, step, values.films);
+  return step;
+}
 
-/** Moves, copies or removes a step. */
+export const STEP_MOVES = ["up", "down", "remove", "copy"] as const;
+export type StepMove = (typeof STEP_MOVES)[number];
+
+/** Moves, copies or removes a step; the answer names the step that is there to be looked at, of a copy the copy. */
 export async function changeStep(
   scope: ActorScope,
   place: StepPlace & { stepId: string },
@@ -75,19 +86,24 @@ export async function changeStep(
       const step = steps[at];
       if (!step) throw notFound("step");
       const others = steps.filter(({ id }) => id !== step.id);
+      let shown = step;
       if (move === "remove") {
         em.remove(step);
         renumber(others);
       } else if (move === "copy") {
-        const copy = await copyStep(em, step);
+        requireRoom(steps);
+        const copy = await copyStep(em, step, { flow, title: `${step.title}, again`.slice(0, 120) });
         renumber([...steps.slice(0, at + 1), copy, ...steps.slice(at + 1)]);
+        shown = copy;
       } else {
-        const to = move === "up" ? at - 1 : at + 1;
-        renumber([...others.slice(0, Math.max(0, to)), step, ...others.slice(Math.max(0, to))]);
+        const to = Math.min(Math.max(0, move === "up" ? at - 1 : at + 1), others.length);
+        // The first cannot go further up, the last no further down: nothing has changed then.
+        if (to === at) return { outcome: "saved", id: step.id };
+        renumber([...others.slice(0, to), step, ...others.slice(to)]);
       }
       touch(flow, scope);
       await em.flush();
-      return { outcome: "saved", id: step.id };
+      return { outcome: "saved", id: shown.id };
     }),
   );
 }
@@ -129,6 +145,10 @@ async function replaceFilms(
   changes: StepValues["films"],
 ): Promise<void> {
   for (const old of await em.find(FlowStepFilm, { step: step.id })) em.remove(old);
+  await addFilms(em, flow, step, changes);
+}
+
+async function addFilms(em: EntityManager, flow: Flow, step: FlowStep, changes: StepValues["films"]): Promise<void> {
   const films = await em.find(Film, { id: { $in: changes.map(({ film }) => film) } });
   for (const [position, change] of changes.entries()) {
     const film = films.find(({ id }) => id === change.film);
@@ -149,12 +169,15 @@ async function replaceFilms(
   }
 }
 
-async function copyStep(em: EntityManager, step: FlowStep): Promise<FlowStep> {
-  const { id: _id, title, ...columns } = step;
-  const copy = em.create(FlowStep, { ...columns, id: randomUUID(), title: `${title}, again`.slice(0, 120) });
+/** A copy of a step with its films, in the same or another flow of the program. */
+export async function copyStep(
+  em: EntityManager,
+  step: FlowStep,
+  changes: { flow: Flow; title?: string },
+): Promise<FlowStep> {
+  const copy = em.create(FlowStep, { ...step, ...changes, id: randomUUID() });
   for (const film of await em.find(FlowStepFilm, { step: step.id })) {
-    const { id: _filmId, ...rest } = film;
-    em.create(FlowStepFilm, { ...rest, id: randomUUID(), step: copy });
+    em.create(FlowStepFilm, { ...film, id: randomUUID(), step: copy });
   }
   return copy;
 }

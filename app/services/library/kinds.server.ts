@@ -5,6 +5,7 @@ import { Equipment } from "#app/db/entities/equipment.ts";
 import { Film } from "#app/db/entities/film.ts";
 import { Silicon } from "#app/db/entities/silicon.ts";
 import type { SitePermission } from "#app/policies/permissions.ts";
+import type { LibraryKey, LibraryRecords } from "#app/schemas/library-records.ts";
 
 /** SQL by which a list is sorted; values are columns of ours, never what somebody typed. */
 const byValue = (column: string) => `(${column}->>'value')::double precision`;
@@ -15,9 +16,12 @@ interface LibraryKind {
   edit: SitePermission;
   /** names used in the address, with the SQL that they sort by; the first is the default */
   sorts: Record<string, string>;
-  /** columns that a filter of the same name narrows to one value */
-  filters: readonly string[];
+  /** names of the filters in the address, with the condition that a chosen value stands for; null for one that means nothing */
+  filters: Record<string, (value: string) => Record<string, unknown> | null>;
 }
+
+/** A filter that narrows a column to one value. */
+const equals = (column: string) => (value: string) => ({ [column]: value });
 
 export const LIBRARY = {
   film: {
@@ -33,14 +37,19 @@ export const LIBRARY = {
       limit: byValue("temperature_limit"),
       source: "stress->>'source'",
     },
-    filters: ["kind"],
+    filters: { kind: equals("kind") },
   },
   silicon: {
     entity: Silicon,
     what: "silicon wafer",
     edit: "edit carriers, bonds and limits",
-    sorts: { name: "lower(name)", diameter: "diameter" },
-    filters: [],
+    sorts: {
+      name: "lower(name)",
+      orientation: "orientation",
+      diameter: "diameter",
+      thickness: byValue("thickness"),
+    },
+    filters: { orientation: equals("orientation") },
   },
   carrier: {
     entity: Carrier,
@@ -48,13 +57,16 @@ export const LIBRARY = {
     edit: "edit carriers, bonds and limits",
     sorts: {
       name: "lower(name)",
+      material: "material",
       diameter: "diameter",
       thickness: byValue("thickness"),
       modulus: byValue("youngs_modulus"),
       expansion: byValue("expansion"),
+      variation: byValue("thickness_variation"),
       limit: byValue("temperature_limit"),
+      reuse: "reuse_limit",
     },
-    filters: ["material"],
+    filters: { material: equals("material") },
   },
   bondingMaterial: {
     entity: BondingMaterial,
@@ -62,12 +74,18 @@ export const LIBRARY = {
     edit: "edit carriers, bonds and limits",
     sorts: {
       name: "lower(name)",
+      class: "flows",
       softening: byValue("softening"),
       limit: byValue("temperature_limit"),
+      bond: byValue("bond_temperature"),
+      thickness: "least_thickness",
       modulus: byValue("effective_modulus"),
       release: "release",
     },
-    filters: ["release"],
+    filters: {
+      class: (value) => (value === "flows" || value === "cross-linked" ? { flows: value === "flows" } : null),
+      release: equals("release"),
+    },
   },
   equipment: {
     entity: Equipment,
@@ -78,18 +96,22 @@ export const LIBRARY = {
       up: byValue("warp_limit_edges_up"),
       down: byValue("warp_limit_edges_down"),
       least: byValue("least_unsupported_thickness"),
+      hot: "at_peak",
+      diameter: byValue("largest_diameter"),
     },
-    filters: [],
+    filters: { hot: equals("atPeak") },
   },
-} as const satisfies Record<string, LibraryKind & { entity: unknown }>;
+} as const satisfies Record<LibraryKey, LibraryKind & { entity: unknown }>;
 
-export type LibraryKey = keyof typeof LIBRARY;
-export type LibraryEntity<Key extends LibraryKey> = InferEntity<(typeof LIBRARY)[Key]["entity"]>;
+type Entity<Key extends LibraryKey> = InferEntity<(typeof LIBRARY)[Key]["entity"]>;
 
-/** Columns that are about the record, not about the thing. */
-type RecordColumn = "createdAt" | "createdBy" | "updatedAt" | "updatedBy" | "version";
+/** The columns of an entity; one that may be null is never left out. */
+type Columns<Key extends LibraryKey> = {
+  [Column in keyof Entity<Key> & string]: Exclude<Entity<Key>[Column], undefined>;
+};
+
+/** Kinds whose columns are what their schema gives: all of them, or this does not compile. */
+type Sound = { [Key in LibraryKey]: Columns<Key> extends LibraryRecords[Key] ? Key : never }[LibraryKey];
 
 /** A record as it leaves the service: the columns of the thing itself, plain. */
-export type LibraryRecord<Key extends LibraryKey> = {
-  [Column in Exclude<keyof LibraryEntity<Key> & string, RecordColumn>]: LibraryEntity<Key>[Column];
-};
+export type LibraryRecord<Key extends Sound> = LibraryRecords[Key];

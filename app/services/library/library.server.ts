@@ -1,14 +1,15 @@
 import { raw, ReferenceKind, wrap } from "@mikro-orm/postgresql";
 import type { EntityName } from "@mikro-orm/core";
-import { PAGE_SIZE, type ListPage, type ListParams } from "#app/lib/list-params.ts";
+import { PAGE_SIZE, readListParams, type ListPage, type ListParams } from "#app/lib/list-params.ts";
 import { mayOnSite } from "#app/policies/permissions.ts";
+import type { LibraryKey } from "#app/schemas/library-records.ts";
 import { notFound } from "#app/server/problem.server.ts";
 import { inScope, type ActorScope } from "#app/server/scope.server.ts";
 import { requireOnSite } from "../permission.server.ts";
 import { saveNamedRecord, saving, stampOf, type RecordStamp, type Saved } from "../record.server.ts";
 import { escapeLike } from "../like.server.ts";
 import { idFrom } from "../uuid.server.ts";
-import { LIBRARY, type LibraryKey, type LibraryRecord } from "./kinds.server.ts";
+import { LIBRARY, type LibraryRecord } from "./kinds.server.ts";
 
 /** The entity as the generic code sees it: a named record. */
 interface NamedRecord {
@@ -30,7 +31,7 @@ function plain<Key extends LibraryKey>(key: Key, entity: NamedRecord): LibraryRe
     ({ kind, name }) => kind === ReferenceKind.SCALAR && !ABOUT_THE_RECORD.has(name),
   );
   const values = entity as unknown as Record<string, unknown>;
-  return Object.fromEntries(columns.map(({ name }) => [name, values[name] ?? null])) as LibraryRecord<Key>;
+  return Object.fromEntries(columns.map(({ name }) => [name, values[name] ?? null])) as unknown as LibraryRecord<Key>;
 }
 
 /** A page of a library list; searched by name, filtered and sorted in the database. */
@@ -45,7 +46,8 @@ export async function listLibrary<Key extends LibraryKey>(
   return inScope(scope, async (em) => {
     const where: Record<string, unknown> = {};
     if (params.query) where["name"] = { $ilike: `%${escapeLike(params.query)}%` };
-    for (const filter of filters) if (params.filters[filter]) where[filter] = params.filters[filter];
+    for (const [filter, condition] of Object.entries<(value: string) => object | null>(filters))
+      if (params.filters[filter]) Object.assign(where, condition(params.filters[filter]));
     const [rows, total] = await em.findAndCount(entityOf(key), where as never, {
       orderBy: [{ [raw(sort)]: params.descending ? "desc nulls last" : "asc nulls last" }, { id: "asc" }] as never,
       limit: PAGE_SIZE,
@@ -53,6 +55,17 @@ export async function listLibrary<Key extends LibraryKey>(
     });
     return { rows: rows.map((row) => plain(key, row)), total, params };
   });
+}
+
+/** The page of a library list that an address asks for, and whether this person may add to the list. */
+export async function listLibraryAt<Key extends LibraryKey>(
+  scope: ActorScope,
+  key: Key,
+  search: URLSearchParams,
+): Promise<{ page: ListPage<LibraryRecord<Key>>; mayEdit: boolean }> {
+  const { sorts, filters, edit } = LIBRARY[key];
+  const params = readListParams(search, { sorts: Object.keys(sorts), filters: Object.keys(filters) });
+  return { page: await listLibrary(scope, key, params), mayEdit: mayOnSite(scope.actor, edit) };
 }
 
 /** Everything of a kind, by name, for choices in forms. */

@@ -1,4 +1,3 @@
-import { readFileSync } from "node:fs";
 import type { ReactNode } from "react";
 import { describe, expect, it } from "vitest";
 import { WarpChart } from "#app/components/charts/WarpChart.tsx";
@@ -12,10 +11,9 @@ import { StepStrip } from "#app/components/drawings/StepStrip.tsx";
 import { SupportBar } from "#app/components/drawings/SupportBar.tsx";
 import { SupportColumn } from "#app/components/drawings/SupportColumn.tsx";
 import { HOLDINGS, OUTCOMES, SOURCE_KINDS } from "#app/engine/vocabulary.ts";
+import { shippedRanges, strangeCharacters, STYLES } from "../glyphs.ts";
 import { render } from "./render.ts";
 import { LAYERS, STEPS, WARP } from "./samples.ts";
-
-const STYLES = readFileSync(new URL("../../../app/app.css", import.meta.url), "utf8");
 
 const EVERYTHING: readonly [name: string, part: ReactNode][] = [
   [
@@ -81,17 +79,6 @@ const EVERYTHING: readonly [name: string, part: ReactNode][] = [
   ["chart", <WarpChart key="" data={WARP} label="Warp" summary="Warp grows as silicon gets thinner." />],
 ];
 
-/** The code points for which the style sheet declares a face. */
-function shippedRanges(): [from: number, to: number][] {
-  const lists = [...STYLES.matchAll(/unicode-range:\s*([^;]+);/g)].map((match) => match[1] ?? "");
-  return lists.flatMap((list) =>
-    list.split(",").map((range): [number, number] => {
-      const [from = "0", to = from] = range.trim().replace("U+", "").split("-");
-      return [parseInt(from, 16), parseInt(to, 16)];
-    }),
-  );
-}
-
 describe.each(EVERYTHING)("%s", (_, part) => {
   const markup = render(part);
 
@@ -101,12 +88,7 @@ describe.each(EVERYTHING)("%s", (_, part) => {
   });
 
   it("uses only characters for which a font is shipped", () => {
-    const ranges = shippedRanges();
-    const strange = [...markup].filter((character) => {
-      const point = character.codePointAt(0) ?? 0;
-      return !ranges.some(([from, to]) => point >= from && point <= to);
-    });
-    expect(strange).toEqual([]);
+    expect(strangeCharacters(markup)).toEqual([]);
   });
 
   it("paints with tokens only, so that dark, paper and forced colours follow", () => {

@@ -57,6 +57,25 @@ describe("support bar", () => {
     expect(words(bar({ numbers: [4, 5, 6, 7, 8, 9, 10, 11] }))).toMatch(/^4 5 6 7 8 9 10 11/);
   });
 
+  it("leaves out numbers that would touch, on paper as on screen", () => {
+    const many: SupportClass[] = Array.from({ length: 60 }, () => "bare");
+    const planned = many.map(() => null);
+    expect(words(bar({ required: many, planned, variant: "paper" }))).toMatch(/^1 2 4 6 .* 58 60 Bare/);
+    expect(words(bar({ required: many.slice(0, 24), planned: planned.slice(0, 24), variant: "paper" }))).toMatch(
+      /^1 2 3 4 .* 23 24 Bare/,
+    );
+  });
+
+  it("writes a word that has no room on its segment beneath the bar on paper, with its steps", () => {
+    const narrow: SupportClass[] = Array.from({ length: 24 }, (_, index) => (index === 10 ? "tape or ring" : "bare"));
+    const outcomes = narrow.map((_, index) =>
+      index === 4 || index === 5 ? ("do not run" as const) : ("clear" as const),
+    );
+    const paper = { required: narrow, planned: narrow.map(() => null), outcomes, variant: "paper" as const };
+    expect(words(bar(paper))).toContain("Tape or ring: step 11; do not run: steps 5 and 6");
+    expect(words(bar({ ...paper, variant: "screen" }))).not.toContain("step 11");
+  });
+
   it("draws planned support once per run, with its words", () => {
     expect(words(bar()).match(/Glass carrier 3.0 ppm/g)).toHaveLength(1);
     expect(words(bar()).match(/film frame/g)).toHaveLength(1);

@@ -1,7 +1,32 @@
-export function loader() {
-  return null;
+import { data, redirect } from "react-router";
+import { AssessmentPage } from "#app/components/assessments/AssessmentPage.tsx";
+import { assessmentNumber } from "#app/lib/assessment-number.ts";
+import { assessmentView } from "#app/lib/assessment-view.ts";
+import { scopeOf } from "#app/server/contexts.server.ts";
+import { problem } from "#app/server/problem.server.ts";
+import { getAssessment, runAgain } from "#app/services/assessments/assessments.server.ts";
+import type { Route } from "./+types/assessment";
+
+export const meta: Route.MetaFunction = ({ loaderData }) => {
+  const head = loaderData?.view.head;
+  return [{ title: `${head ? assessmentNumber(head.program.slug, head.documentNumber) : "Assessment"} · Planeward` }];
+};
+
+export async function loader({ context, params, url }: Route.LoaderArgs) {
+  const { result, ...head } = await getAssessment(scopeOf(context), params.assessmentId);
+  return { view: assessmentView(head, result, url.searchParams.get("step")) };
 }
 
-export default function Page() {
-  return null;
+export async function action({ request, context, params }: Route.ActionArgs) {
+  // A body that is no form asks for nothing.
+  const form = await request.formData().catch(() => null);
+  if (form?.get("intent") !== "run")
+    throw problem(400, "An assessment can be run again, and nothing else can be done with it here.");
+  const ran = await runAgain(scopeOf(context), params.assessmentId);
+  if (ran.outcome === "not computable") return data(ran, { status: 409 });
+  throw redirect(`/assessments/${ran.id}`);
+}
+
+export default function Assessment({ loaderData, actionData }: Route.ComponentProps) {
+  return <AssessmentPage view={loaderData.view} refused={actionData} />;
 }

@@ -1,7 +1,24 @@
-export function loader() {
-  return null;
+import { SheetList } from "#app/components/sheet/SheetList.tsx";
+import { readListParams } from "#app/lib/list-params.ts";
+import { programsWhere } from "#app/policies/permissions.ts";
+import { scopeOf } from "#app/server/contexts.server.ts";
+import { ASSESSMENT_SORTS, listNewestAssessments } from "#app/services/assessments/newest-assessments.server.ts";
+import type { Route } from "./+types/list";
+
+export const meta: Route.MetaFunction = () => [{ title: "Sheets · Planeward" }];
+
+export async function loader({ context, url }: Route.LoaderArgs) {
+  const scope = scopeOf(context);
+  const programs = programsWhere(scope.actor, "see the work").map(({ programSlug, programName }) => ({
+    value: programSlug,
+    label: programName,
+  }));
+  // Nothing that is not released may reach a guest: there is no list to search.
+  if (programs.length === 0) return { page: null, programs };
+  const params = readListParams(url.searchParams, { sorts: ASSESSMENT_SORTS, filters: ["program", "outcome"] });
+  return { page: await listNewestAssessments(scope, params), programs };
 }
 
-export default function Page() {
-  return null;
+export default function Sheets({ loaderData }: Route.ComponentProps) {
+  return <SheetList {...loaderData} />;
 }

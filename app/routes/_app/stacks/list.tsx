@@ -1,7 +1,63 @@
-export function loader() {
-  return null;
+import { Link } from "react-router";
+import { PageHead } from "#app/components/layout/PageHead.tsx";
+import { exaggerationOf } from "#app/components/stacks/bow-of.ts";
+import { stackColumns } from "#app/components/stacks/stack-columns.tsx";
+import { DataTable } from "#app/components/ui/DataTable.tsx";
+import { EmptyState } from "#app/components/ui/EmptyState.tsx";
+import { ListHead } from "#app/components/ui/ListHead.tsx";
+import { readListParams } from "#app/lib/list-params.ts";
+import { programsWhere } from "#app/policies/permissions.ts";
+import { scopeOf } from "#app/server/contexts.server.ts";
+import { listStacks, STACK_SORTS } from "#app/services/stacks.server.ts";
+import type { Route } from "./+types/list";
+
+export const meta: Route.MetaFunction = () => [{ title: "Stacks · Planeward" }];
+
+export async function loader({ context, url }: Route.LoaderArgs) {
+  const scope = scopeOf(context);
+  const params = readListParams(url.searchParams, { sorts: STACK_SORTS, filters: ["program"], descending: true });
+  const { flatWithin, ...page } = await listStacks(scope, params);
+  return {
+    page,
+    flatWithin,
+    programs: programsWhere(scope.actor, "see the work").map(({ programSlug, programName }) => ({
+      value: programSlug,
+      label: programName,
+    })),
+    mayEdit: programsWhere(scope.actor, "edit stacks and flows").length > 0,
+  };
 }
 
-export default function Page() {
-  return null;
+export default function Stacks({ loaderData }: Route.ComponentProps) {
+  const { page, flatWithin, programs, mayEdit } = loaderData;
+  const searched = page.params.query !== "" || Object.values(page.params.filters).some(Boolean);
+  const wafers = page.rows.flatMap(({ answer, diameter }) => (answer ? [{ shape: answer.shape, diameter }] : []));
+  const add = mayEdit && (
+    <Link to="/stacks/new" className="btn btn-primary">
+      New stack
+    </Link>
+  );
+  return (
+    <>
+      <PageHead title="Stacks" remark={`${page.total} ${searched ? "found" : "stacks"}`} actions={add} />
+      <ListHead
+        what="stacks"
+        filters={programs.length > 1 ? [{ name: "program", label: "Program", options: programs }] : []}
+      />
+      {page.rows.length > 0 ? (
+        <DataTable
+          caption="Stacks"
+          columns={stackColumns(exaggerationOf(wafers), flatWithin)}
+          page={page}
+          rowKey={({ id }) => id}
+        />
+      ) : (
+        <EmptyState title={searched ? "No stack fits" : "No stacks yet"} actions={add}>
+          {searched
+            ? "Change the search, or take a filter away."
+            : "Films on silicon of a given thickness belong here: how the free wafer lies, and what it takes to lift it. Flows start from them."}
+        </EmptyState>
+      )}
+    </>
+  );
 }

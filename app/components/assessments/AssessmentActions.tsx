@@ -1,0 +1,22 @@
+import { Link } from "react-router";
+import type { AssessmentHead } from "#app/lib/assessment-view.ts";
+import { RunAgain } from "./RunAgain.tsx";
+
+/** What can be done with an assessment. One that is out of date is run again rather than printed. */
+export function AssessmentActions({ head, phone = false }: { head: AssessmentHead; phone?: boolean }) {
+  const { mayAssess, outOfDate } = head;
+  const grow = phone ? "flex-1" : "";
+  return (
+    <>
+      {mayAssess ? (
+        <Link to={`/flows/${head.flow.id}`} className={`btn ${grow}`}>
+          Change the flow
+        </Link>
+      ) : null}
+      {mayAssess && !outOfDate && !phone ? <RunAgain /> : null}
+      <Link to={`/sheets/${head.id}`} className={`btn ${outOfDate && mayAssess ? "" : "btn-primary"} ${grow}`}>
+        Print the sheet
+      </Link>
+    </>
+  );
+}

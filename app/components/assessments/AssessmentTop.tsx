@@ -1,0 +1,54 @@
+import { Link } from "react-router";
+import { Notice } from "#app/components/ui/Notice.tsx";
+import type { AssessmentHead } from "#app/lib/assessment-view.ts";
+import { AssessmentActions } from "./AssessmentActions.tsx";
+import { RunAgain } from "./RunAgain.tsx";
+
+/** Why running again came to nothing. */
+export interface NotComputable {
+  step: number | null;
+  reason: string;
+}
+
+/** The way here and what can be done, then what has to be known before anything below is believed. */
+export function AssessmentTop({ head, refused }: { head: AssessmentHead; refused: NotComputable | undefined }) {
+  return (
+    <>
+      <div className="screen-only flex min-h-14 flex-wrap items-center gap-x-4 gap-y-2 py-3">
+        <nav aria-label="Path">
+          <Link to="/flows" className="link text-quiet">
+            Flows
+          </Link>
+          <span aria-hidden="true"> / </span>
+          <Link to={`/flows/${head.flow.id}`} className="link text-quiet">
+            {head.flow.name}
+          </Link>
+          <span aria-hidden="true"> / </span>
+          <span aria-current="page">Assessment {head.number}</span>
+        </nav>
+        <div className="ml-auto flex flex-wrap gap-2 max-tablet:hidden">
+          <AssessmentActions head={head} />
+        </div>
+      </div>
+      {refused ? (
+        <Notice kind="error" title="The flow as it is now cannot be computed, so nothing was stored">
+          {refused.step === null ? "" : `Step ${refused.step}: `}
+          {refused.reason}{" "}
+          <Link to={`/flows/${head.flow.id}`} className="link">
+            Change the flow
+          </Link>
+        </Notice>
+      ) : null}
+      {head.outOfDate ? (
+        <Notice kind="caution" title="Out of date: the flow, or something that it uses, has changed since">
+          <p>The figures below are of {head.createdAt.slice(0, 10)}, and stay as they were.</p>
+          {head.mayAssess ? (
+            <div className="screen-only mt-2">
+              <RunAgain primary />
+            </div>
+          ) : null}
+        </Notice>
+      ) : null}
+    </>
+  );
+}

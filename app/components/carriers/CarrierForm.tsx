@@ -1,0 +1,80 @@
+import { CheckField } from "#app/components/forms/CheckField.tsx";
+import { ChoiceField, sameWords } from "#app/components/forms/ChoiceField.tsx";
+import { LineField } from "#app/components/forms/LineField.tsx";
+import type { MeasuredText } from "#app/components/forms/MeasuredField.tsx";
+import { NoteField } from "#app/components/forms/NoteField.tsx";
+import { QuantityField } from "#app/components/forms/QuantityField.tsx";
+import { useRecordForm } from "#app/components/forms/use-record-form.ts";
+import { measuredTexts } from "#app/components/library/property.ts";
+import { PropertyField } from "#app/components/library/PropertyField.tsx";
+import { RecordForm, type RecordFormProps } from "#app/components/library/RecordForm.tsx";
+import { CARRIER_MATERIALS } from "#app/engine/flow/model.ts";
+import { quantityText } from "#app/lib/form-values.ts";
+import type { LibraryRecords } from "#app/schemas/library-records.ts";
+import { CARRIER_PROPERTIES as P } from "./carrier-properties.ts";
+import { FormGroup } from "./FormGroup.tsx";
+
+type Carrier = LibraryRecords["carrier"];
+
+type CarrierFormValues = {
+  name: string;
+  material: string;
+  diameter: string;
+  expansionRange: string;
+  passesUltraviolet: boolean;
+  passesInfrared: boolean;
+  perforated: boolean;
+  reuseLimit: string;
+  note: string;
+} & Record<keyof typeof P, MeasuredText>;
+
+const formValues = (carrier: Carrier) => ({
+  ...carrier,
+  ...measuredTexts(carrier, P),
+  diameter: quantityText(carrier.diameter, "length", "mm"),
+  expansionRange: carrier.expansion === null ? "" : carrier.expansionRange,
+  reuseLimit: String(carrier.reuseLimit),
+});
+
+/** A carrier with all its properties, each with tolerance and source. */
+export function CarrierForm({ record, ...rest }: RecordFormProps<Carrier>) {
+  const [form, fields] = useRecordForm<CarrierFormValues>({
+    lastResult: rest.lastResult,
+    defaultValue: record ? formValues(record) : {},
+  });
+  return (
+    <RecordForm form={form} what="carrier" {...rest}>
+      <div className="grid gap-3 tablet:grid-cols-[2fr_1fr_1fr]">
+        <LineField field={fields.name} label="Name" />
+        <ChoiceField field={fields.material} label="Material" choices={sameWords(CARRIER_MATERIALS)} blank="Choose" />
+        <QuantityField field={fields.diameter} label="Diameter" dimension="length" example="300 mm" />
+      </div>
+      <PropertyField field={fields.thickness} of={P.thickness} />
+      <PropertyField field={fields.youngsModulus} of={P.youngsModulus} />
+      <PropertyField field={fields.poissonsRatio} of={P.poissonsRatio} />
+      <PropertyField field={fields.expansion} of={P.expansion} />
+      <LineField
+        field={fields.expansionRange}
+        label="Temperatures over which that expansion is a mean"
+        hint="25 to 150 °C; blank for silicon. A mean over another range is another number."
+      />
+      <PropertyField field={fields.density} of={P.density} />
+      <PropertyField field={fields.thicknessVariation} of={P.thicknessVariation} />
+      <PropertyField field={fields.temperatureLimit} of={P.temperatureLimit} />
+      <FormGroup label="Light, openings and use">
+        <div className="grid gap-x-6 gap-y-1 tablet:grid-cols-[repeat(3,auto)_1fr]">
+          <CheckField field={fields.passesUltraviolet} label="Passes ultraviolet light" />
+          <CheckField field={fields.passesInfrared} label="Passes infrared light" />
+          <CheckField field={fields.perforated} label="Perforated, for solvent" />
+          <LineField
+            field={fields.reuseLimit}
+            label="May be used, times"
+            input={{ inputMode: "numeric" }}
+            className="tablet:max-w-40 tablet:justify-self-end"
+          />
+        </div>
+      </FormGroup>
+      <NoteField field={fields.note} label="Note" />
+    </RecordForm>
+  );
+}

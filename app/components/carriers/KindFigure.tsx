@@ -1,0 +1,31 @@
+import type { KindPageData } from "#app/lib/kind-data.ts";
+import { PairTrialSection } from "./PairTrialSection.tsx";
+import { TemperatureBand } from "./TemperatureBand.tsx";
+
+/** What a kind is drawn as on its own page: a carrier as a pair, a bonding material on a scale of temperature. */
+export function KindFigure(data: KindPageData) {
+  switch (data.slug) {
+    case "carriers":
+      return data.trial && <PairTrialSection trial={data.trial} />;
+    case "bonding-materials": {
+      const { softening, flows, temperatureLimit, bondTemperature, releaseTemperature } = data.record;
+      return (
+        <div className="px-6 pb-6 max-tablet:hidden">
+          <TemperatureBand
+            temperatures={{
+              softening: softening?.value ?? null,
+              flows,
+              limit: temperatureLimit.value,
+              margin: data.site.adhesiveMargin,
+            }}
+            bond={bondTemperature.value}
+            release={releaseTemperature.value}
+          />
+        </div>
+      );
+    }
+    case "silicon":
+    case "tools":
+      return null;
+  }
+}

@@ -1,0 +1,38 @@
+import type { PropertyDescription } from "#app/components/library/property.ts";
+
+/** The measured properties of a tool, in the order of its table and form. */
+export const TOOL_PROPERTIES = {
+  warpLimitEdgesUp: {
+    label: "Warp limit, edges up",
+    ask: "Warp limit, edges up as loaded",
+    dimension: "length",
+    unit: "µm",
+    example: "400 µm",
+    hint: "Blank: no limit, on a frame",
+    missing: "no limit",
+  },
+  warpLimitEdgesDown: {
+    label: "Warp limit, edges down",
+    ask: "Warp limit, edges down as loaded",
+    dimension: "length",
+    unit: "µm",
+    example: "500 µm",
+    hint: "Blank: no limit, on a frame",
+    missing: "no limit",
+  },
+  leastUnsupportedThickness: {
+    label: "Least unsupported thickness",
+    ask: "Least silicon thickness that it takes without support",
+    dimension: "length",
+    unit: "µm",
+    example: "250 µm",
+    hint: "0 µm: it takes any; blank: not known",
+  },
+  largestDiameter: {
+    label: "Largest diameter",
+    ask: "Largest wafer or carrier that it takes",
+    dimension: "length",
+    unit: "mm",
+    example: "300 mm",
+  },
+} as const satisfies Record<string, PropertyDescription>;

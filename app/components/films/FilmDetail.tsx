@@ -1,0 +1,32 @@
+import { LibraryDetail } from "#app/components/library/LibraryDetail.tsx";
+import { propertyRows } from "#app/components/library/property.ts";
+import type { LibraryRecords, LibraryUse } from "#app/schemas/library-records.ts";
+import { FILM_PROPERTIES } from "./film-properties.ts";
+import { filmAnswer, filmHistory } from "./film-words.ts";
+
+interface Props {
+  record: LibraryRecords["film"];
+  stamp: { updatedAt: string; updatedBy: string };
+  mayEdit: boolean;
+  uses: LibraryUse[];
+}
+
+/** A film: every property with its source, and where it is used. */
+export function FilmDetail(props: Props) {
+  const { record } = props;
+  return (
+    <LibraryDetail
+      {...props}
+      crumbs={[{ name: "Films", path: "/films" }]}
+      view={{
+        answer: filmAnswer(record),
+        because: filmHistory(record),
+        properties: propertyRows(record, FILM_PROPERTIES),
+        facts: [
+          { label: "Kind", value: record.kind },
+          { label: "State of the stress", value: record.stressState || "not given" },
+        ],
+      }}
+    />
+  );
+}

@@ -1,0 +1,22 @@
+import { formatMeasured } from "#app/lib/format-measured.ts";
+import type { LibraryRecords } from "#app/schemas/library-records.ts";
+
+type Film = LibraryRecords["film"];
+
+/** What a film does to a wafer by itself, on the device side, device side up. */
+export function filmAnswer({ stress }: Film): string {
+  if (stress.value === 0) return "Without stress at 25 °C: by itself it does not bend the wafer.";
+  const pull = formatMeasured(stress, "stress", { unit: "MPa", sign: true });
+  return stress.value > 0
+    ? `In tension at 25 °C, ${pull}: on the device side it pulls the wafer to a bowl, edges up.`
+    : `In compression at 25 °C, ${pull}: on the device side it pushes the wafer to a dome, edges down.`;
+}
+
+/** What becomes of that with heat. */
+export function filmHistory({ kind, yieldStress }: Film): string {
+  if (kind === "polymer")
+    return "Heat takes its stress down to zero and never into compression; cooling brings it back.";
+  return kind === "metal" && yieldStress
+    ? `It yields at ${formatMeasured(yieldStress, "stress", { unit: "MPa" })}, so a hot step can leave it with another stress.`
+    : "It is taken as elastic: heat changes its stress only while it lasts.";
+}

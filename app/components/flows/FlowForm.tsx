@@ -1,0 +1,98 @@
+import { getFormProps, type SubmissionResult } from "@conform-to/react";
+import { Form, Link } from "react-router";
+import { ChoiceField, type Choice } from "#app/components/forms/ChoiceField.tsx";
+import { FormHead } from "#app/components/forms/FormHead.tsx";
+import { LineField } from "#app/components/forms/LineField.tsx";
+import { MeasuredField } from "#app/components/forms/MeasuredField.tsx";
+import { NoteField } from "#app/components/forms/NoteField.tsx";
+import { SubmitButton } from "#app/components/forms/SubmitButton.tsx";
+import { LEAVE, UnsavedGuard } from "#app/components/forms/UnsavedGuard.tsx";
+import { useRecordForm } from "#app/components/forms/use-record-form.ts";
+import type { ExplainedChoice } from "#app/lib/flow-step-choices.ts";
+import { ExplainedChoiceField } from "./ExplainedChoiceField.tsx";
+import type { FlowFormValues } from "./flow-form-values.ts";
+
+interface Props {
+  values: Partial<FlowFormValues>;
+  version: number | null;
+  /** what cannot be chosen here is said instead, under the same name */
+  program: Choice[] | { id: string; name: string };
+  silicon: Choice[] | { id: string; name: string };
+  /** carriers and bonding materials, where the flow starts from steps that need them */
+  bond?: { carriers: ExplainedChoice[]; materials: ExplainedChoice[] } | null;
+  /** a stack that the first steps come from */
+  stack?: string;
+  lastResult: SubmissionResult<string[]> | null | undefined;
+  back: string;
+  save: string;
+}
+
+/** The head of a flow: whose it is, its name, and the silicon as it comes in. */
+export function FlowForm({ values, version, program, silicon, bond, stack, lastResult, back, save }: Props) {
+  const [form, fields] = useRecordForm<FlowFormValues>({ lastResult, defaultValue: values });
+  return (
+    <Form method="post" {...getFormProps(form)} className="frame max-w-240 space-y-4 p-4 tablet:p-6">
+      <UnsavedGuard dirty={form.dirty} />
+      <FormHead lastResult={lastResult} />
+      {version !== null && <input type="hidden" name="version" value={version} />}
+      {stack && <input type="hidden" name="stack" value={stack} />}
+      <div className="grid gap-3 tablet:grid-cols-[2fr_1fr]">
+        <LineField field={fields.name} label="Name" hint="Product, target thickness, how it is held" />
+        {Array.isArray(program) ? (
+          <ChoiceField field={fields.program} label="Program" choices={program} blank="Choose" />
+        ) : (
+          <Given field="program" label="Program" value={program} />
+        )}
+      </div>
+      {Array.isArray(silicon) ? (
+        <ChoiceField field={fields.silicon} label="Silicon" choices={silicon} blank="Choose" />
+      ) : (
+        <Given field="silicon" label="Silicon" value={silicon} />
+      )}
+      <MeasuredField
+        field={fields.incomingThickness}
+        label="Silicon as it comes in"
+        dimension="length"
+        example="725 um"
+        hint="Before the first step"
+      />
+      {bond && (
+        <fieldset className="border-t border-line pt-3">
+          <legend className="float-left mb-2 w-full font-semibold">Carrier and bond</legend>
+          <div className="clear-both grid gap-3 tablet:grid-cols-2">
+            <ExplainedChoiceField
+              field={fields.carrier}
+              label="Carrier"
+              choices={bond.carriers}
+              blank="Choose a carrier"
+            />
+            <ExplainedChoiceField
+              field={fields.bondingMaterial}
+              label="Bonding material"
+              choices={bond.materials}
+              blank="Choose a bonding material"
+            />
+          </div>
+        </fieldset>
+      )}
+      <NoteField field={fields.note} label="Note" />
+      <div className="flex flex-wrap gap-2 border-t border-line pt-4">
+        <SubmitButton busy="Saving">{save}</SubmitButton>
+        <Link to={back} state={LEAVE} className="btn">
+          Leave without saving
+        </Link>
+      </div>
+    </Form>
+  );
+}
+
+/** What is settled already: said, and sent along. */
+function Given({ field, label, value }: { field: string; label: string; value: { id: string; name: string } }) {
+  return (
+    <div className="field">
+      <span>{label}</span>
+      <p className="py-1.5">{value.name}</p>
+      <input type="hidden" name={field} value={value.id} />
+    </div>
+  );
+}

@@ -1,0 +1,25 @@
+const PATHS = {
+  up: "M3 10.5 8 5.5l5 5",
+  down: "M3 5.5l5 5 5-5",
+  copy: "M5.5 5.5V2.5h8v8h-3M2.5 5.5h8v8h-8z",
+  insert: "M8 5v8M4 9h8M2 2.5h12",
+  remove: "M4 4l8 8M12 4l-8 8",
+  more: "M2.5 8h2M7 8h2M11.5 8h2",
+} as const;
+
+/** Sign of what can be done to a row; the button that holds it carries the words. */
+export function StepIcon({ kind }: { kind: keyof typeof PATHS }) {
+  return (
+    <svg
+      width="16"
+      height="16"
+      viewBox="0 0 16 16"
+      fill="none"
+      stroke="currentColor"
+      strokeWidth="1.5"
+      aria-hidden="true"
+    >
+      <path d={PATHS[kind]} />
+    </svg>
+  );
+}

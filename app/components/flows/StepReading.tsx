@@ -1,0 +1,88 @@
+import { PropertyTable, type Property } from "#app/components/ui/PropertyTable.tsx";
+import type { Measured } from "#app/engine/measured.ts";
+import { formatQuantity } from "#app/engine/units/format.ts";
+import type { Exposure, Holding, Side } from "#app/engine/vocabulary.ts";
+
+interface Step {
+  kind: string;
+  peakTemperature: number;
+  holdTime: number | null;
+  equipment: { name: string } | null;
+  exposures: Exposure[];
+  planned: Holding;
+  siliconAfter: Measured | null;
+  trimWidth: Measured | null;
+  trimDepth: Measured | null;
+  carrier: { name: string } | null;
+  bondingMaterial: { name: string } | null;
+  bondThickness: Measured | null;
+  groundFaceForce: Measured | null;
+  films: {
+    change: "adds" | "removes";
+    side: Side;
+    film: { name: string };
+    thickness: Measured | null;
+    stress: Measured;
+    coverage: number;
+  }[];
+}
+
+/** A step for those who may not change it: everything of its form, to read. */
+export function StepReading({ step }: { step: Step }) {
+  const words: [label: string, value: string | null][] = [
+    ["Kind of step", step.kind],
+    ["Peak temperature", formatQuantity(step.peakTemperature, "temperature", { unit: "°C" })],
+    ["Time at peak", step.holdTime === null ? null : formatQuantity(step.holdTime, "time")],
+    ["Tool", step.equipment?.name ?? "none chosen"],
+    ["Exposed to", step.exposures.join(", ") || null],
+    ["Held by, as planned", step.planned],
+    ["Carrier", step.carrier?.name ?? null],
+    ["Bonding material", step.bondingMaterial?.name ?? null],
+    ...step.films.map(filmWords),
+  ];
+  const properties = measuredOf(step);
+  return (
+    <div className="frame min-w-0 space-y-4 p-4 tablet:p-6">
+      <dl className="grid gap-x-6 gap-y-3 tablet:grid-cols-2">
+        {words.map(([label, value], index) =>
+          value === null ? null : (
+            <div key={index}>
+              <dt className="text-label text-quiet">{label}</dt>
+              <dd>{value}</dd>
+            </div>
+          ),
+        )}
+      </dl>
+      {properties.length > 0 && <PropertyTable caption="Figures of the step" properties={properties} />}
+    </div>
+  );
+}
+
+function filmWords({ change, side, film, coverage }: Step["films"][number]): [string, string] {
+  const share = change === "adds" && coverage < 1 ? `, ${formatQuantity(coverage, "fraction", { unit: "%" })}` : "";
+  return [`${change === "adds" ? "Adds" : "Removes"}, ${side === "front" ? "device" : "back"} side`, film.name + share];
+}
+
+function measuredOf(step: Step): Property[] {
+  const length = (label: string, measured: Measured | null, unit = "µm"): Property => ({
+    label,
+    measured,
+    dimension: "length",
+    unit,
+  });
+  const films = step.films
+    .filter(({ change }) => change === "adds")
+    .flatMap(({ film, thickness, stress }): Property[] => [
+      length(`${film.name}: thickness`, thickness),
+      { label: `${film.name}: stress at 25 °C`, measured: stress, dimension: "stress", unit: "MPa", sign: true },
+    ]);
+  const all: Property[] = [
+    length("Silicon after the step", step.siliconAfter),
+    length("Width of the trim", step.trimWidth, "mm"),
+    length("Depth of the trim", step.trimDepth),
+    length("Thickness of the bond", step.bondThickness),
+    { label: "Force of the ground face", measured: step.groundFaceForce, dimension: "forcePerLength", unit: "N/m" },
+    ...films,
+  ];
+  return all.filter(({ measured }) => measured);
+}

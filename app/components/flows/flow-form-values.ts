@@ -1,0 +1,33 @@
+import type { Measured } from "#app/engine/measured.ts";
+import { measuredText } from "#app/lib/form-values.ts";
+import type { MeasuredText } from "../forms/MeasuredField.tsx";
+
+/** The head of a flow as the text of its form. */
+export type FlowFormValues = {
+  program: string;
+  name: string;
+  note: string;
+  silicon: string;
+  incomingThickness: MeasuredText;
+  stack: string;
+  carrier: string;
+  bondingMaterial: string;
+};
+
+interface FlowHead {
+  program: { id: string };
+  name: string;
+  note: string;
+  silicon: { id: string };
+  incomingThickness: Measured;
+}
+
+export function flowFormValues(flow: FlowHead): Partial<FlowFormValues> {
+  return {
+    program: flow.program.id,
+    name: flow.name,
+    note: flow.note,
+    silicon: flow.silicon.id,
+    incomingThickness: measuredText(flow.incomingThickness, "length", { unit: "µm" }),
+  };
+}

@@ -1,0 +1,96 @@
+import type { StepKind } from "#app/engine/flow/model.ts";
+import type { Measured } from "#app/engine/measured.ts";
+import type { Exposure, Holding, Side } from "#app/engine/vocabulary.ts";
+import { measuredText, quantityText } from "#app/lib/form-values.ts";
+import type { MeasuredText } from "../forms/MeasuredField.tsx";
+
+/** A film that a step adds or removes, as the text of its form. */
+export type FilmChangeValues = {
+  change: string;
+  side: string;
+  film: string;
+  coverage: string;
+  thickness: MeasuredText;
+  stress: MeasuredText;
+};
+
+/** A step as the text of its form. */
+export type StepFormValues = {
+  title: string;
+  kind: string;
+  peakTemperature: string;
+  holdTime: string;
+  equipment: string;
+  exposures: string[];
+  planned: string;
+  siliconAfter: MeasuredText;
+  trimWidth: MeasuredText;
+  trimDepth: MeasuredText;
+  carrier: string;
+  bondingMaterial: string;
+  bondThickness: MeasuredText;
+  groundFaceForce: MeasuredText;
+  films: FilmChangeValues[];
+};
+
+interface Step {
+  title: string;
+  kind: StepKind;
+  peakTemperature: number;
+  holdTime: number | null;
+  equipment: { id: string } | null;
+  exposures: Exposure[];
+  planned: Holding;
+  siliconAfter: Measured | null;
+  trimWidth: Measured | null;
+  trimDepth: Measured | null;
+  carrier: { id: string } | null;
+  bondingMaterial: { id: string } | null;
+  bondThickness: Measured | null;
+  groundFaceForce: Measured | null;
+  films: {
+    change: "adds" | "removes";
+    side: Side;
+    film: { id: string };
+    thickness: Measured | null;
+    ownStress: Measured | null;
+    coverage: number;
+  }[];
+}
+
+const length = (measured: Measured | null, unit = "µm") => measuredText(measured, "length", { unit });
+
+export function stepFormValues(step: Step): StepFormValues {
+  return {
+    title: step.title,
+    kind: step.kind,
+    peakTemperature: quantityText(step.peakTemperature, "temperature", "°C"),
+    holdTime: quantityText(step.holdTime, "time", "min"),
+    equipment: step.equipment?.id ?? "",
+    exposures: step.exposures,
+    planned: step.planned,
+    siliconAfter: length(step.siliconAfter),
+    trimWidth: length(step.trimWidth, "mm"),
+    trimDepth: length(step.trimDepth),
+    carrier: step.carrier?.id ?? "",
+    bondingMaterial: step.bondingMaterial?.id ?? "",
+    bondThickness: length(step.bondThickness),
+    groundFaceForce: measuredText(step.groundFaceForce, "forcePerLength", { unit: "N/m" }),
+    films: step.films.map((film) => ({
+      change: film.change,
+      side: film.side,
+      film: film.film.id,
+      coverage: film.change === "adds" ? quantityText(film.coverage, "fraction", "%") : "",
+      thickness: length(film.thickness),
+      stress: measuredText(film.ownStress, "stress", { unit: "MPa" }),
+    })),
+  };
+}
+
+/** A new step: at room temperature, held as the one before it. */
+export function newStepValues(planned: Holding): Partial<StepFormValues> {
+  return { peakTemperature: "25 °C", planned, films: [] };
+}
+
+/** A film that is about to be typed. */
+export const NEW_FILM: Partial<FilmChangeValues> = { change: "adds", side: "front", coverage: "100 %" };

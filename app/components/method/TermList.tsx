@@ -1,0 +1,19 @@
+import { noBreak } from "#app/components/drawings/no-break.ts";
+import type { Term } from "./method-words.ts";
+
+/** Terms with their meanings, each ruled off from the next. */
+export function TermList({ terms }: { terms: readonly Term[] }) {
+  return (
+    <dl>
+      {terms.map(({ term, meaning }) => (
+        <div
+          key={term}
+          className="grid gap-x-6 border-t border-line py-2 first:border-0 tablet:grid-cols-[200px_minmax(0,1fr)]"
+        >
+          <dt className="font-semibold">{term}</dt>
+          <dd>{noBreak(meaning)}</dd>
+        </div>
+      ))}
+    </dl>
+  );
+}

@@ -1,0 +1,82 @@
+import { fileSize } from "#app/lib/file-size.ts";
+import { formatQuantity } from "#app/engine/units/format.ts";
+import type { FileReading, ScanParameters } from "#app/schemas/scan-result.ts";
+import type { ScanFileView } from "#app/schemas/scan-view.ts";
+
+const DELIMITERS: Record<string, string> = {
+  ",": "commas",
+  ";": "semicolons",
+  "\t": "tabs",
+  "|": "upright bars",
+  " ": "blanks",
+};
+
+interface Props {
+  which: "before" | "after";
+  file: ScanFileView;
+  reading: FileReading;
+  parameters: ScanParameters;
+}
+
+/** How one file was read, what of it could not be, and the file itself. */
+export function ScanReading({ which, file, reading, parameters }: Props) {
+  const { rows, used, columns, heading, delimiter, skipped, skippedInAll } = reading;
+  const mm = (metres: number) => formatQuantity(metres, "length", { unit: "mm" });
+  return (
+    <section aria-labelledby={`file-${which}`}>
+      <h2 id={`file-${which}`} className="font-semibold">
+        File {which} the film
+      </h2>
+      <p className="mt-1 wrap-anywhere">
+        <a href={`/scans/files/${file.id}`} className="link" download>
+          {file.name}
+        </a>{" "}
+        <span className="text-quiet">{fileSize(file.size)}, as it came</span>
+      </p>
+      <p className="mt-1 text-quiet">
+        {`${used} of ${rows} rows read, ${mm(reading.from)} to ${mm(reading.to)}. ${DELIMITERS[delimiter] ? `Split at ${DELIMITERS[delimiter]}` : `Split at “${delimiter}”`}, decimal ${parameters.decimalMark}; position in ${parameters.positionUnit}, height in ${parameters.heightUnit}. `}
+        {heading ? `Heading “${heading}”.` : "No heading."}
+        {columns > 2 && ` Of ${columns} columns the first two were read.`}
+      </p>
+      {skippedInAll > 0 && (
+        <details className="mt-1">
+          <summary className="link w-fit cursor-pointer">
+            {skippedInAll === 1 ? "1 row left out" : `${skippedInAll} rows left out`}
+          </summary>
+          <div className="overflow-x-auto" tabIndex={0} role="region" aria-label={`Rows left out, ${which} the film`}>
+            <table className="table">
+              <thead>
+                <tr>
+                  <th scope="col" className="num">
+                    Row
+                  </th>
+                  <th scope="col">Column</th>
+                  <th scope="col">What stands there</th>
+                </tr>
+              </thead>
+              <tbody>
+                {skipped.map(({ row, column, text }) => (
+                  <tr key={row}>
+                    <th scope="row" className="num font-normal">
+                      {row}
+                    </th>
+                    <td>{column}</td>
+                    <td className="wrap-anywhere">
+                      {text === "" ? <span className="text-quiet">nothing</span> : text}
+                    </td>
+                  </tr>
+                ))}
+              </tbody>
+            </table>
+          </div>
+          {skippedInAll > skipped.length && (
+            <p className="text-quiet">
+              The first {skipped.length} of {skippedInAll} are listed.
+            </p>
+          )}
+        </details>
+      )}
+      <p className="mt-1 text-label wrap-anywhere text-quiet">SHA-256 {file.hash}</p>
+    </section>
+  );
+}

@@ -1,0 +1,107 @@
+import { Link } from "react-router";
+import { FindingTag } from "#app/components/drawings/FindingTag.tsx";
+import { OUTCOME_SIGNS } from "#app/components/drawings/severity.ts";
+import { PageHead } from "#app/components/layout/PageHead.tsx";
+import { DataTable, type Column } from "#app/components/ui/DataTable.tsx";
+import { EmptyState } from "#app/components/ui/EmptyState.tsx";
+import { ListHead } from "#app/components/ui/ListHead.tsx";
+import type { Option } from "#app/components/ui/SelectField.tsx";
+import { OUTCOMES, type Outcome } from "#app/engine/vocabulary.ts";
+import { assessmentNumber } from "#app/lib/assessment-number.ts";
+import type { ListPage } from "#app/lib/list-params.ts";
+
+interface Row {
+  id: string;
+  documentNumber: number;
+  flow: string;
+  program: string;
+  programSlug: string;
+  outcome: Outcome;
+  createdAt: string;
+  createdBy: string;
+  flowChanged: boolean;
+}
+
+const columns: Column<Row>[] = [
+  {
+    key: "number",
+    head: "Number",
+    wide: true,
+    cell: ({ programSlug, documentNumber }) => assessmentNumber(programSlug, documentNumber),
+  },
+  {
+    key: "flow",
+    head: "Flow",
+    sortable: true,
+    cell: ({ id, flow, flowChanged }) => (
+      <>
+        <Link to={`/assessments/${id}`} className="link">
+          {flow}
+        </Link>
+        {flowChanged ? <span className="block text-label text-caution">changed since it was assessed</span> : null}
+      </>
+    ),
+  },
+  { key: "program", head: "Program", wide: true, cell: ({ program }) => program },
+  { key: "outcome", head: "Outcome", sortable: true, cell: ({ outcome }) => <FindingTag outcome={outcome} /> },
+  { key: "run", head: "Assessed", sortable: true, wide: true, cell: ({ createdAt }) => createdAt.slice(0, 10) },
+  { key: "by", head: "By", wide: true, cell: ({ createdBy }) => createdBy },
+  {
+    key: "print",
+    head: "Sheet",
+    cell: ({ id, flow }) => (
+      <Link to={`/sheets/${id}`} className="link">
+        Print<span className="sr-only"> the sheet of {flow}</span>
+      </Link>
+    ),
+  },
+];
+
+const outcomeOptions = OUTCOMES.map((outcome) => ({ value: outcome, label: OUTCOME_SIGNS[outcome].word }));
+
+/** What can be printed: the newest assessment of each flow. A guest, who sees none of them, is told what will stand here. */
+export function SheetList({ page, programs }: { page: ListPage<Row> | null; programs: readonly Option[] }) {
+  if (page === null)
+    return (
+      <>
+        <PageHead title="Sheets" />
+        <EmptyState title="No sheet has been released to you yet">
+          Handling-risk sheets of your programs appear here once they are checked and released.
+        </EmptyState>
+      </>
+    );
+  const searched = page.params.query !== "" || Object.values(page.params.filters).some(Boolean);
+  return (
+    <>
+      <PageHead
+        title="Sheets"
+        remark={`${page.total} ${searched ? "found" : "to print"}, all drafts: none is released`}
+      />
+      <ListHead
+        what="flows"
+        filters={[
+          { name: "program", label: "Program", options: [...programs] },
+          { name: "outcome", label: "Outcome", options: outcomeOptions },
+        ]}
+      />
+      {page.rows.length > 0 ? (
+        <DataTable caption="Sheets to print" columns={columns} page={page} rowKey={({ id }) => id} />
+      ) : (
+        <EmptyState
+          title={searched ? "No sheet fits" : "No sheet yet"}
+          actions={
+            searched ? null : (
+              <Link to="/flows" className="btn btn-primary">
+                Go to the flows
+              </Link>
+            )
+          }
+        >
+          {searched
+            ? "Change the search, or take a filter away."
+            : "A sheet is printed from an assessment. Assess a flow first; its newest assessment then stands here."}
+        </EmptyState>
+      )}
+    </>
+  );
+}

@@ -1,0 +1,166 @@
+import type { FieldMetadata, FormMetadata } from "@conform-to/react";
+import { useInBrowser } from "#app/components/ui/use-in-browser.ts";
+import type { Side } from "#app/engine/vocabulary.ts";
+import type { DraftLayer, FilmChoice, StackDraft } from "#app/lib/stack-draft.ts";
+import { newLayer, type LayerText, type StackText } from "#app/lib/stack-text.ts";
+import { lengthWords } from "#app/lib/stack-words.ts";
+import { LayerFields } from "./LayerFields.tsx";
+
+interface Props {
+  form: FormMetadata<StackText>;
+  field: FieldMetadata<LayerText[]>;
+  draft: StackDraft;
+  films: readonly FilmChoice[];
+  /** position in the list, null when the silicon is selected */
+  selected: number | null;
+  onSelect: (index: number) => void;
+}
+
+/** Where a new film goes in the list, which runs from the top of the cut to its foot. */
+export const insertion = (name: FieldMetadata<LayerText[]>["name"], side: Side, count: number) => ({
+  name,
+  index: side === "front" ? 0 : count,
+  defaultValue: newLayer(side),
+});
+
+/**
+ * All films as fields, top to bottom as the cut shows them. With scripts the selected one is open and the others are folded;
+ * without them all are open.
+ */
+export function LayerList({ form, field, draft, films, selected, onSelect }: Props) {
+  const list = field.getFieldList();
+  const on = (side: Side) => list.flatMap((_, index) => (draft.layers[index]?.side === side ? [index] : []));
+  const part = (index: number, among: number[]) => {
+    const layer = list[index];
+    return (
+      layer && (
+        <LayerPart
+          key={layer.key}
+          form={form}
+          field={layer}
+          place={{ index, count: list.length, first: index === among[0], last: index === among.at(-1) }}
+          draft={draft.layers[index]}
+          incomplete={draft.faults.some(({ field: name }) => name.startsWith(`layers[${index}].`))}
+          films={films}
+          selected={selected === index}
+          onSelect={onSelect}
+        />
+      )
+    );
+  };
+  const [front, back] = [on("front"), on("back")];
+  return (
+    <div>
+      <SideHead id="device-side" words="Device side" />
+      <AddButton form={form} insert={insertion(field.name, "front", list.length)} words="Add a film on top" />
+      {front.map((index) => part(index, front))}
+      <p className="border-t border-line px-4 py-2 text-quiet">Silicon</p>
+      {back.map((index) => part(index, back))}
+      <SideHead id="back-side" words="Back side" />
+      <AddButton form={form} insert={insertion(field.name, "back", list.length)} words="Add a film below" />
+    </div>
+  );
+}
+
+function SideHead({ id, words }: { id: string; words: string }) {
+  return (
+    <h2 id={id} className="border-t border-line px-4 pt-3 font-semibold first:border-t-0">
+      {words}
+    </h2>
+  );
+}
+
+interface AddProps {
+  form: FormMetadata<StackText>;
+  insert: ReturnType<typeof insertion>;
+  words: string;
+}
+
+function AddButton({ form, insert, words }: AddProps) {
+  return (
+    <p className="px-4 pt-1 pb-3">
+      <button {...form.insert.getButtonProps(insert)} className="link cursor-pointer">
+        {words}
+      </button>
+    </p>
+  );
+}
+
+interface PartProps {
+  form: FormMetadata<StackText>;
+  field: FieldMetadata<LayerText>;
+  place: { index: number; count: number; first: boolean; last: boolean };
+  draft: DraftLayer | undefined;
+  /** whether something is missing or cannot be read */
+  incomplete: boolean;
+  films: readonly FilmChoice[];
+  selected: boolean;
+  onSelect: (index: number) => void;
+}
+
+function LayerPart({ form, field, place, draft, incomplete, films, selected, onSelect }: PartProps) {
+  const inBrowser = useInBrowser();
+  const { index, count, first, last } = place;
+  const name = draft?.name ?? `film ${index + 1}`;
+  // What the server has refused stays open until it is mended.
+  const shown = selected || (incomplete && Object.keys(field.allErrors).length > 0);
+  return (
+    <details id={`layer-${index}`} open={!inBrowser || shown} className="border-t border-line">
+      <summary
+        className={`flex min-h-10 cursor-pointer flex-wrap items-baseline gap-x-2 px-4 py-2 ${selected ? "bg-wash" : ""}`}
+        onClick={(event) => {
+          event.preventDefault();
+          onSelect(index);
+        }}
+      >
+        <span className={selected ? "font-semibold" : ""}>{draft?.film ? name : "Film not chosen"}</span>
+        {draft !== undefined && draft.thickness !== null && (
+          <span className="text-quiet">{lengthWords(draft.thickness)}</span>
+        )}
+        {incomplete && <span className="text-stop">needs a look</span>}
+        <span className="ml-auto text-label text-quiet">
+          {index + 1} of {count}
+        </span>
+      </summary>
+      <fieldset className={`px-4 pt-1 pb-4 ${shown ? "" : "[@media(scripting:enabled)]:hidden"}`}>
+        <legend className="sr-only">
+          {name}, {index + 1} of {count} from the top
+        </legend>
+        <LayerFields field={field} draft={draft} films={films} />
+        <div className="mt-4 grid grid-cols-2 gap-3">
+          <MoveButton form={form} from={index} to={index - 1} disabled={first} words="Move up" of={name} />
+          <MoveButton form={form} from={index} to={index + 1} disabled={last} words="Move down" of={name} />
+          <button
+            {...form.remove.getButtonProps({ name: "layers", index })}
+            className="btn btn-remove col-span-2"
+            aria-label={`Remove ${name}`}
+          >
+            Remove film
+          </button>
+        </div>
+      </fieldset>
+    </details>
+  );
+}
+
+interface MoveProps {
+  form: FormMetadata<StackText>;
+  from: number;
+  to: number;
+  disabled: boolean;
+  words: string;
+  of: string;
+}
+
+function MoveButton({ form, from, to, disabled, words, of }: MoveProps) {
+  return (
+    <button
+      {...form.reorder.getButtonProps({ name: "layers", from, to })}
+      className="btn"
+      disabled={disabled}
+      aria-label={`${words}: ${of}`}
+    >
+      {words}
+    </button>
+  );
+}

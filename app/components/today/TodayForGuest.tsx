@@ -1,0 +1,28 @@
+import { EmptyState } from "#app/components/ui/EmptyState.tsx";
+import type { TodayView } from "#app/schemas/today.ts";
+import { TodayHead } from "./TodayHead.tsx";
+import { TodayPrograms } from "./TodayPrograms.tsx";
+
+/** Today for a guest: their programs, and the sheets that were released to them. */
+export function TodayForGuest({ view }: { view: TodayView }) {
+  const { programs, now } = view;
+  if (programs.length === 0)
+    return (
+      <>
+        <TodayHead sentence="You do not belong to a program yet." now={now} />
+        <EmptyState title="No program">Ask your administrator to add you to the program that you work for.</EmptyState>
+      </>
+    );
+  return (
+    <>
+      <TodayHead sentence="No sheet has been released to you yet." now={now} />
+      <div className="grid gap-x-12 gap-y-6 wide:grid-cols-[minmax(0,1fr)_384px]">
+        <EmptyState title="Handling-risk sheets">
+          A sheet says at which steps a wafer of your program needs support, and what must not happen to it. It shows
+          here and under Sheets as soon as the process owner has released it to you.
+        </EmptyState>
+        <TodayPrograms programs={programs} works={false} />
+      </div>
+    </>
+  );
+}

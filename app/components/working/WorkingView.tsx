@@ -1,0 +1,95 @@
+import { EQUATIONS, type Equation } from "#app/engine/equations.ts";
+import { citation, SOURCES, type SourceId } from "#app/engine/sources.ts";
+import type { Working, WorkingLine } from "#app/engine/working.ts";
+import { formatInUnit } from "#app/lib/format-unit.ts";
+import { Formula } from "./Formula.tsx";
+
+const HEADINGS: Record<number, "h2" | "h3" | "h4" | "h5"> = { 2: "h2", 3: "h3", 4: "h4", 5: "h5" };
+
+export interface WorkingViewProps {
+  working: Working;
+  /** level of its heading; the calculations that it rests on stand one below, down to the sixth */
+  level?: number;
+}
+
+/**
+ * The calculation behind a figure: the equation, what went in with unit and source, what came out, where it holds, and the
+ * calculations that it rests on.
+ */
+export function WorkingView({ working, level = 3 }: WorkingViewProps) {
+  const { equation: id, inputs, result, note, from = [] } = working;
+  const equation: Equation = EQUATIONS[id];
+  const Heading = HEADINGS[level] ?? "h6";
+  return (
+    <section>
+      <Heading className="font-semibold">{equation.title}</Heading>
+      <div className="mt-1 overflow-x-auto py-1" tabIndex={0} role="group" aria-label={`Formula: ${equation.title}`}>
+        {equation.formula.split(", ").map((part) => (
+          <p key={part} className="whitespace-nowrap text-lead">
+            <Formula text={part} />
+          </p>
+        ))}
+      </div>
+      <div className="overflow-x-auto" tabIndex={0} role="group" aria-label={`Figures: ${equation.title}`}>
+        <table className="table">
+          <caption className="sr-only">{equation.title}</caption>
+          <thead>
+            <tr>
+              <th scope="col">Symbol</th>
+              <th scope="col">Meaning</th>
+              <th scope="col" className="num">
+                Value
+              </th>
+            </tr>
+          </thead>
+          <tbody>
+            {inputs.map((line) => (
+              <Line key={line.symbol} line={line} />
+            ))}
+            <Line line={result} result />
+          </tbody>
+        </table>
+      </div>
+      <p className="mt-2 text-label text-quiet">
+        <Formula text={[note, equation.range, equation.caution].filter(Boolean).join(" ")} />
+      </p>
+      <p className="mt-1 text-label text-quiet">
+        Sources: {equation.sources.map((source) => shortCitation(source)).join("; ")}.
+      </p>
+      {from.length > 0 && (
+        <div className="mt-3 space-y-4 border-l border-edge pl-4">
+          {from.map((part, index) => (
+            <WorkingView key={index} working={part} level={level + 1} />
+          ))}
+        </div>
+      )}
+    </section>
+  );
+}
+
+function Line({ line, result = false }: { line: WorkingLine; result?: boolean }) {
+  const { symbol, meaning, value, unit, temperaturePoint, source } = line;
+  return (
+    <tr className={result ? "font-semibold" : undefined}>
+      <th scope="row" className={`whitespace-nowrap ${result ? "font-semibold" : "font-normal"}`}>
+        <Formula text={symbol} />
+      </th>
+      <td>
+        {meaning}
+        {source !== undefined && <span className="block text-label font-normal text-quiet">{sourceWords(source)}</span>}
+      </td>
+      <td className="num">{formatInUnit(value, unit, temperaturePoint)}</td>
+    </tr>
+  );
+}
+
+/** A line's source is a key of the bibliography, or the provenance of an input in words. */
+const sourceWords = (source: string) => (source in SOURCES ? citation(source as SourceId) : source);
+
+/** Author and year, as in running text; the whole entry is on the method page. */
+function shortCitation(id: SourceId): string {
+  const { author, title, year, basis } = SOURCES[id];
+  if (basis === "own derivation" || basis === "own computation")
+    return `${basis}, ${title.charAt(0).toLowerCase()}${title.slice(1)}`;
+  return year === null ? `${author}, ${title}` : `${author} ${year}`;
+}

@@ -1,0 +1,56 @@
+import type { BowShape } from "#app/components/drawings/bow-shape.ts";
+import { formatQuantity } from "#app/engine/units/format.ts";
+import type { Holding, ShapeWord } from "#app/engine/vocabulary.ts";
+import type { ShapeResult } from "#app/schemas/assessment-result.ts";
+import { micrometres } from "./assessment-figure.ts";
+
+/** How a wafer lies on the tool, as the bow line draws it; null is a wafer that tape or frame holds flat. */
+export function lyingAs(shape: ShapeResult | null): BowShape {
+  if (!shape) return { kind: "held" };
+  if (isRolled(shape)) return { kind: "rolled", radius: shape.rollRadius, edgesUp: shape.edgesUp };
+  // Drawn as it lies: with its edges up the centre is low, whichever side is up.
+  return { kind: "bowed", bow: shape.edgesUp ? -Math.abs(shape.bow) : Math.abs(shape.bow) };
+}
+
+/** A wafer that has rolled up has a radius and an edge lift, never a bow. */
+export function isRolled(shape: ShapeResult): shape is ShapeResult & { rollRadius: number } {
+  return shape.regime === "curled" && shape.rollRadius !== null;
+}
+
+/** What holds it, as the end of 'held flat by': 'film frame', 'grinding tape'. */
+export function heldFlat(holding: Holding): string {
+  return `held flat by ${holding}`;
+}
+
+/** Its shape in words, as it lies: 'edges up 231 ± 52 µm', 'flat, 8 ± 5 µm', 'rolls up, radius about 0.32 m, edges lift 15 mm'. */
+export function shapeText(shape: ShapeResult, word?: ShapeWord): string {
+  if (isRolled(shape))
+    return `rolls up, radius about ${radiusText(shape.rollRadius)}, edges lift ${liftText(shape.warp)}`;
+  const size = micrometres(shape.warp, shape.standardUncertainty);
+  if (word === "flat") return `flat, ${size}`;
+  return `${shape.edgesUp ? "edges up" : "edges down"} ${size}`;
+}
+
+/** The standard bow beside it: 'standard bow −231 ± 52 µm'; null for a wafer that has rolled up, which has none. */
+export function standardBowText(shape: ShapeResult): string | null {
+  return isRolled(shape) ? null : `standard bow ${micrometres(shape.bow, shape.standardUncertainty)}`;
+}
+
+/**
+ * What the wafer would do if nothing held it, with its load against the one at which it starts to roll.
+ * @param released its shape at 25 °C, device side up
+ */
+export function releasedText(released: ShapeResult): string {
+  const { stabilityRatio } = released;
+  const load = formatQuantity(stabilityRatio, "number", { significant: 2, trim: true });
+  if (isRolled(released)) return `${shapeText(released)}. Its load is ${load} times the one at which it starts to roll`;
+  return `${shapeText(released)}, device side up. Its load is ${load} of the one at which it starts to roll`;
+}
+
+const radiusText = (radius: number) =>
+  radius < 0.1
+    ? formatQuantity(radius, "length", { unit: "mm", decimals: 0 })
+    : formatQuantity(radius, "length", { unit: "m", significant: 2 });
+
+const liftText = (lift: number) =>
+  lift < 1e-3 ? micrometres(lift) : formatQuantity(lift, "length", { unit: "mm", significant: 2 });

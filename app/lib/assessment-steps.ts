@@ -1,0 +1,125 @@
+import type { BowShape } from "#app/components/drawings/bow-shape.ts";
+import type { StepKind } from "#app/engine/flow/model.ts";
+import type { Finding } from "#app/engine/rules/finding.ts";
+import type { FaceUp, Holding, Outcome, SupportClass } from "#app/engine/vocabulary.ts";
+import type { AssessmentResult, BondResult, StepResult } from "#app/schemas/assessment-result.ts";
+import { celsius, micrometres } from "./assessment-figure.ts";
+import { bySeverity, findingNote } from "./assessment-finding.ts";
+import { isRolled, lyingAs, shapeText } from "./assessment-shape.ts";
+import { formatBare, withoutUnit } from "./format-measured.ts";
+
+/** One step of an assessment for strip, table and list: numbers that are drawn in SI, numbers that are read as text. */
+export interface StepRow {
+  number: number;
+  title: string;
+  shortName: string;
+  silicon: { thickness: number; text: string };
+  temperature: { peak: number; text: string };
+  bow: { shape: BowShape; deviceSideUp: boolean; holding: Holding };
+  /** warp over the tool's own limit with its expanded uncertainty, at the moment that comes nearest; null when held flat */
+  warp: { fraction: number; uncertainty: number } | null;
+  /** warp at 25 °C after the step, µm without the unit */
+  warpText: string;
+  liesAs: string;
+  /** the tool's limit for the side that it lies on, µm without the unit */
+  limitText: string;
+  heldBy: string;
+  /** what is planned, in full, for the dimension lines of the strip; null where it is bare */
+  planned: string | null;
+  required: SupportClass;
+  outcome: Outcome;
+  /** the worst finding in a few words; null when all are clear */
+  note: string | null;
+  /** how many more findings of the step are not clear */
+  more: number;
+}
+
+/** Names of the kinds of step on the strip, at most 12 characters. */
+const SHORT_NAMES: Record<StepKind, string> = {
+  receive: "Receive",
+  measure: "Measure",
+  deposit: "Deposit",
+  cure: "Cure",
+  anneal: "Anneal",
+  pattern: "Pattern",
+  plate: "Plate",
+  reflow: "Reflow",
+  clean: "Clean",
+  "edge trim": "Edge trim",
+  "laminate tape": "Tape",
+  bond: "Bond",
+  grind: "Grind",
+  "stress relief": "Relieve",
+  polish: "Polish",
+  "via reveal": "Reveal",
+  "back-side film": "Back film",
+  "mount on frame": "Mount",
+  debond: "Debond",
+  dice: "Dice",
+  move: "Move",
+  store: "Store",
+  hold: "Hold",
+};
+
+const NONE = "–";
+
+/** All steps of a result, in order. */
+export function stepRows(result: AssessmentResult): StepRow[] {
+  return result.steps.map((step) =>
+    stepRow(
+      step,
+      result.findings.filter((finding) => finding.step === step.number),
+      result.bonds.find(({ fromStep, toStep }) => fromStep <= step.number && step.number <= toStep) ?? null,
+    ),
+  );
+}
+
+function stepRow(step: StepResult, findings: Finding[], bond: BondResult | null): StepRow {
+  const { atRoom, faceUp, planned } = step;
+  const [worst, ...others] = findings.filter(({ outcome }) => outcome !== "clear").sort(bySeverity);
+  return {
+    number: step.number,
+    title: step.title,
+    shortName: SHORT_NAMES[step.kind],
+    silicon: { thickness: step.silicon, text: formatBare(step.silicon, "length", "µm") },
+    temperature: { peak: step.peakTemperature, text: withoutUnit(celsius(step.peakTemperature)) },
+    bow: { shape: lyingAs(atRoom), deviceSideUp: isUp(faceUp), holding: planned },
+    warp: warpShare(findings),
+    warpText: atRoom && !isRolled(atRoom) ? withoutUnit(micrometres(atRoom.warp, atRoom.standardUncertainty)) : NONE,
+    liesAs: atRoom && isRolled(atRoom) ? shapeText(atRoom) : step.lies,
+    limitText: limitText(step),
+    heldBy: sentenceCase(planned),
+    planned: planned === "bare" ? null : plannedInFull(step, bond),
+    required: step.required,
+    outcome: step.outcome,
+    note: worst ? findingNote(worst) : null,
+    more: others.length,
+  };
+}
+
+const isUp = (faceUp: FaceUp) => faceUp === "device side";
+
+/** First letter large, the rest as it was. */
+export function sentenceCase(text: string): string {
+  return text.charAt(0).toUpperCase() + text.slice(1);
+}
+
+/** How near the step comes to its tool's limit, from the finding that judged it. */
+function warpShare(findings: Finding[]): StepRow["warp"] {
+  const judged = findings.find(({ rule, limit }) => rule === 2 && limit);
+  const [figure] = judged?.figures ?? [];
+  if (!judged?.limit || !figure) return null;
+  return {
+    fraction: figure.value / judged.limit.value,
+    uncertainty: (2 * (figure.standardUncertainty ?? 0)) / judged.limit.value,
+  };
+}
+
+function limitText({ atRoom, equipment }: StepResult): string {
+  const limit = atRoom && equipment && (atRoom.edgesUp ? equipment.edgesUp : equipment.edgesDown);
+  return limit === null ? NONE : formatBare(limit, "length", "µm");
+}
+
+function plannedInFull(step: StepResult, bond: BondResult | null): string {
+  return step.planned === "carrier" && bond ? `${bond.carrier}, ${bond.material}` : sentenceCase(step.plannedName);
+}

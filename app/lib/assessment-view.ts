@@ -1,0 +1,185 @@
+import type { TitleBlockFields } from "#app/components/drawings/TitleBlock.tsx";
+import { tightestStep } from "#app/engine/flow/answer.ts";
+import type { AssumedInput } from "#app/engine/flow/assess.ts";
+import type { ReleaseMethod } from "#app/engine/flow/model.ts";
+import type { Finding } from "#app/engine/rules/finding.ts";
+import { formatWithUncertainty } from "#app/engine/units/format.ts";
+import type { Outcome } from "#app/engine/vocabulary.ts";
+import type { AssessmentResult, BondResult, StepResult } from "#app/schemas/assessment-result.ts";
+import { celsius, figureText, micrometres } from "./assessment-figure.ts";
+import { bySeverity, figureWorkingPath } from "./assessment-finding.ts";
+import { assessmentNumber } from "./assessment-number.ts";
+import { selectedStep, stepAskedFor, type SelectedStep } from "./assessment-selected.ts";
+import { isRolled } from "./assessment-shape.ts";
+import { stepRows, type StepRow } from "./assessment-steps.ts";
+import { SITE_NAME } from "./site.ts";
+
+/** What a stored assessment says of itself, beside its result. */
+export interface AssessmentHead {
+  id: string;
+  /** counts within the flow */
+  number: number;
+  /** counts within the program */
+  documentNumber: number;
+  flow: { id: string; name: string };
+  program: { name: string; slug: string };
+  engineVersion: string;
+  inputHash: string;
+  createdAt: string;
+  createdBy: string;
+  outOfDate: boolean;
+  mayAssess: boolean;
+}
+
+/** A figure of the answer, with a link to where it comes from. */
+export interface AnswerFigureView {
+  label: string;
+  value: string;
+  /** to its working or a place on the page, or to the step that it is of */
+  link: { text: string; to: string | { step: number } } | null;
+}
+
+/** What would clear some steps, said once. */
+export interface RemedyView {
+  outcome: Outcome;
+  steps: number[];
+  text: string;
+}
+
+export interface BondView {
+  steps: string;
+  carrier: string;
+  material: string;
+  thickness: string;
+  limit: string;
+  release: ReleaseMethod;
+}
+
+/** An assessment as its page shows it: everything formatted, workings left out. */
+export interface AssessmentView {
+  head: AssessmentHead;
+  diameter: number;
+  outcome: Outcome;
+  /** where the verdict arises first; null when it is clear */
+  where: string | null;
+  sentences: string[];
+  figures: AnswerFigureView[];
+  steps: StepRow[];
+  selected: SelectedStep | null;
+  remedies: RemedyView[];
+  assumed: AssumedInput[];
+  inputs: number;
+  bonds: BondView[];
+  titleBlock: TitleBlockFields;
+}
+
+/**
+ * An assessment for its page.
+ * @param asked number of the step to look at, as the address gives it
+ */
+export function assessmentView(head: AssessmentHead, result: AssessmentResult, asked: string | null): AssessmentView {
+  const { verdict } = result;
+  return {
+    head,
+    diameter: result.wafer.diameter,
+    outcome: verdict.outcome,
+    where: verdict.step === null ? null : `first at step ${verdict.step}`,
+    sentences: result.sentences,
+    figures: answerFigures(head.id, result),
+    steps: stepRows(result),
+    selected: selectedStep(head.id, result, stepAskedFor(result, asked)),
+    remedies: remedies(result.findings),
+    assumed: result.assumed,
+    inputs: result.inputs,
+    bonds: result.bonds.map(bondView),
+    titleBlock: titleBlock(head, "Assessment", "1 of 1"),
+  };
+}
+
+/** The title block of a document made from an assessment that nobody has checked or released. */
+export function titleBlock(head: AssessmentHead, documentType: string, page: string): TitleBlockFields {
+  return {
+    owner: SITE_NAME,
+    documentType,
+    title: head.flow.name,
+    prepared: head.createdBy,
+    checked: "not yet",
+    released: "not yet",
+    number: assessmentNumber(head.program.slug, head.documentNumber),
+    revision: "–",
+    status: "Draft",
+    date: head.createdAt.slice(0, 10),
+    language: "en",
+    page,
+  };
+}
+
+function answerFigures(id: string, result: AssessmentResult): AnswerFigureView[] {
+  const tightest = tightestStep(result);
+  const thinnest = result.steps.reduce<StepResult | null>(
+    (least, step) => (!least || step.silicon < least.silicon ? step : least),
+    null,
+  );
+  const figures = tightest ? tightestFigures(id, result, tightest) : [];
+  if (thinnest) figures.push(thinnestFigure(thinnest));
+  figures.push({
+    label: "Inputs assumed",
+    value: `${result.assumed.length} of ${result.inputs}`,
+    link: result.assumed.length > 0 ? { text: "Which", to: "#assumed" } : null,
+  });
+  return figures;
+}
+
+function tightestFigures(id: string, result: AssessmentResult, tightest: Finding): AnswerFigureView[] {
+  const [figure] = tightest.figures;
+  if (!figure || !tightest.limit) return [];
+  const step = result.steps.find(({ number }) => number === tightest.step);
+  const rolled = step?.atRoom && isRolled(step.atRoom);
+  return [
+    {
+      label: `Tightest, step ${tightest.step}${rolled ? ", edge lift" : ""}`,
+      value: figureText(figure),
+      link: figure.working
+        ? { text: "Working", to: figureWorkingPath(id, result.findings.indexOf(tightest), 0) }
+        : null,
+    },
+    {
+      label: "Its tool takes",
+      value: figureText(tightest.limit),
+      link: { text: tightest.limit.label, to: { step: tightest.step } },
+    },
+  ];
+}
+
+function thinnestFigure({ number, silicon, siliconTolerance }: StepResult): AnswerFigureView {
+  return {
+    label: "Thinnest silicon",
+    value: siliconTolerance
+      ? formatWithUncertainty(silicon, siliconTolerance, "length", { unit: "µm" })
+      : micrometres(silicon),
+    link: { text: `From step ${number}`, to: { step: number } },
+  };
+}
+
+/** What clears everything that is not clear, worst first; steps that the same thing clears stand together. */
+function remedies(findings: Finding[]): RemedyView[] {
+  const found = new Map<string, RemedyView>();
+  for (const { remedy, step, outcome } of findings.toSorted(bySeverity)) {
+    if (remedy === null) continue;
+    const known = found.get(remedy);
+    if (!known) found.set(remedy, { outcome, steps: [step], text: remedy });
+    else if (!known.steps.includes(step)) known.steps.push(step);
+  }
+  return [...found.values()].map((each) => ({ ...each, steps: each.steps.sort((a, b) => a - b) }));
+}
+
+function bondView(bond: BondResult): BondView {
+  return {
+    steps: bond.fromStep === bond.toStep ? `step ${bond.fromStep}` : `step ${bond.fromStep} to ${bond.toStep}`,
+    carrier: bond.carrier,
+    material: bond.material,
+    thickness: micrometres(bond.thickness),
+    limit: celsius(bond.temperatureLimit),
+    release: bond.release,
+  };
+}

@@ -1,0 +1,43 @@
+import { EngineInputError } from "#app/engine/errors.ts";
+import type { FlowInput } from "#app/engine/flow/model.ts";
+import { applyStep, initialState, type FilmState, type WaferState } from "#app/engine/flow/state.ts";
+import { formatQuantity } from "#app/engine/units/format.ts";
+import { filmThicknessText, siliconText } from "./flow-thickness.ts";
+
+/** The wafer as a step finds it, in words. */
+export interface WaferBefore {
+  silicon: string;
+  /** outermost first */
+  front: string[];
+  /** from the silicon outwards */
+  back: string[];
+  /** carrier, tape or frame that it is on; null when it is free */
+  on: string | null;
+}
+
+function filmWords({ addition: { film, thickness, coverage } }: FilmState): string {
+  const share = coverage < 1 ? `, ${formatQuantity(coverage, "fraction", { unit: "%" })}` : "";
+  return `${film.name}, ${filmThicknessText(thickness.value)}${share}`;
+}
+
+/**
+ * The wafer before the step at `index` (from 0), by the steps before it. Null when one of those leaves no silicon, so that there
+ * is no wafer to speak of.
+ */
+export function waferBefore(flow: FlowInput, index: number): WaferBefore | null {
+  let state: WaferState;
+  try {
+    state = flow.steps
+      .slice(0, index)
+      .reduce((wafer, step, at) => applyStep(wafer, step, `steps[${at}]`), initialState(flow));
+  } catch (error) {
+    if (error instanceof EngineInputError) return null;
+    throw error;
+  }
+  return {
+    silicon: `${siliconText(state.silicon)}\u00A0µm`,
+    front: state.front.map(filmWords).toReversed(),
+    back: state.back.map(filmWords),
+    on: state.bond ? `${state.bond.carrier.name}, ${state.bond.material.name}` : state.mount,
+  };
+}

@@ -1,0 +1,222 @@
+import type { BowShape } from "#app/components/drawings/bow-shape.ts";
+import type { TitleBlockFields } from "#app/components/drawings/TitleBlock.tsx";
+import type { ReleaseMethod } from "#app/engine/flow/model.ts";
+import { formatQuantity } from "#app/engine/units/format.ts";
+import {
+  outcomeRank,
+  SUPPORT_CLASSES,
+  supportClassOf,
+  type Holding,
+  type Outcome,
+  type SupportClass,
+} from "#app/engine/vocabulary.ts";
+import type { AssessmentResult, BondResult, ShapeResult, StepResult } from "#app/schemas/assessment-result.ts";
+import { celsius } from "./assessment-figure.ts";
+import { assessmentNumber } from "./assessment-number.ts";
+import { isRolled, lyingAs } from "./assessment-shape.ts";
+import { sentenceCase } from "./assessment-steps.ts";
+import { titleBlock, type AssessmentHead } from "./assessment-view.ts";
+import { formatBare } from "./format-measured.ts";
+import { doNotLines } from "./sheet-do-not.ts";
+import { sheetGroups, type SheetGroup } from "./sheet-groups.ts";
+import { roundedRadius, roundedWarp } from "./sheet-round.ts";
+import { stopLines } from "./sheet-stop.ts";
+import { stepNumbers, stepsInWords } from "./step-numbers.ts";
+
+/** One group of steps as the sheet shows it; every text is for hands: no uncertainty, no model, no stress. */
+export interface SheetGroupView {
+  steps: string;
+  /** by name; null where the support class says it all */
+  heldBy: string | null;
+  support: SupportClass;
+  sideUp: string;
+  touch: string;
+  silicon: string;
+  hottest: string;
+  /** one line for each direction that it lies in */
+  shape: string[];
+  bow: { shape: BowShape; deviceSideUp: boolean; holding: Holding };
+  /** readings that mean stop, one line each; and how they are taken */
+  stop: { lines: string[]; how: string };
+  doNot: string[];
+}
+
+export interface SheetBondView {
+  steps: string;
+  carrier: string;
+  material: string;
+  debond: string;
+}
+
+/** Page 1 of a handling-risk sheet. */
+export interface SheetView {
+  assessmentId: string;
+  number: string;
+  program: string;
+  flow: string;
+  outcome: Outcome;
+  where: string | null;
+  answer: string;
+  /** the sheet must not be worked from, whatever its status */
+  blocked: boolean;
+  support: {
+    required: SupportClass[];
+    planned: (string | null)[];
+    outcomes: Outcome[];
+    numbers: number[];
+    label: string;
+  };
+  diameter: number;
+  groups: SheetGroupView[];
+  bonds: SheetBondView[];
+  /** tapes, frames and rings of the flow, each once */
+  tapes: string[];
+  titleBlock: TitleBlockFields;
+}
+
+/** An assessment as the page for hands. */
+export function sheetView(head: AssessmentHead, result: AssessmentResult): SheetView {
+  const { steps, verdict, bonds } = result;
+  const groups = sheetGroups(steps);
+  return {
+    assessmentId: head.id,
+    number: assessmentNumber(head.program.slug, head.documentNumber),
+    program: head.program.name,
+    flow: head.flow.name,
+    outcome: verdict.outcome,
+    where: verdict.step === null ? null : `first at step ${verdict.step}`,
+    answer: result.sentences[0] ?? "",
+    blocked: outcomeRank(verdict.outcome) >= outcomeRank("needs support"),
+    support: {
+      required: steps.map(({ required }) => required),
+      planned: steps.map(({ planned, plannedName }) => (planned === "bare" ? null : sentenceCase(plannedName))),
+      outcomes: steps.map(({ outcome }) => outcome),
+      numbers: steps.map(({ number }) => number),
+      label: supportInWords(steps),
+    },
+    diameter: result.wafer.diameter,
+    groups: groups.map((group, index) => groupView(group, groups[index - 1]?.steps.at(-1) ?? null, result)),
+    bonds: bonds.map((bond) => bondView(bond, steps)),
+    tapes: [...new Set(groups.flatMap(({ holding }) => (isTape(holding) ? [sentenceCase(holding)] : [])))],
+    titleBlock: titleBlock(head, "Handling-risk sheet", "1 of 1"),
+  };
+}
+
+const isTape = (holding: Holding) => supportClassOf(holding) === "tape or ring";
+
+/** 'Support needed: bare at steps 1 to 13, tape or ring at steps 14 to 19.' */
+function supportInWords(steps: readonly StepResult[]): string {
+  const parts = SUPPORT_CLASSES.flatMap((support) => {
+    const numbers = steps.filter(({ required }) => required === support).map(({ number }) => number);
+    return numbers.length === 0 ? [] : [`${support} at ${stepsInWords(numbers)}`];
+  });
+  return `Support needed: ${parts.join(", ")}.`;
+}
+
+function groupView(group: SheetGroup, before: StepResult | null, result: AssessmentResult): SheetGroupView {
+  const { steps, holding, heldBy } = group;
+  const support = supportClassOf(holding);
+  const { findings, bonds, tapeTemperature } = result;
+  const worst = worstShape(steps);
+  const faces = [...new Set(steps.map(({ faceUp }) => faceUp))];
+  return {
+    steps: stepNumbers(steps.map(({ number }) => number)),
+    heldBy: heldBy === support ? null : sentenceCase(heldBy),
+    support,
+    sideUp: `${sentenceCase(faces.join(", then "))} up`,
+    touch: TOUCH[holding],
+    silicon: siliconText(steps),
+    hottest: hottestText(steps),
+    shape: shapeLines(steps),
+    bow: {
+      shape: lyingAs(worst?.atRoom ?? null),
+      deviceSideUp: (worst ?? steps[0])?.faceUp === "device side",
+      holding,
+    },
+    stop: stopView(group, before),
+    doNot: doNotLines(group, { flow: result.steps, findings, bonds, tapeTemperature }),
+  };
+}
+
+/** What may be touched while this holds the wafer. The device side never is. */
+const TOUCH: Record<Holding, string> = {
+  bare: "Touch back side and edge only",
+  "thin-wafer gripper": "Touch by the gripper only",
+  "grinding tape": "Touch tape and edge only",
+  "film frame": "Touch the frame only",
+  "edge ring": "Touch the ring only",
+  carrier: "Touch the carrier only",
+};
+
+/** '725 µm', '725 to 100 µm'. Thickness is what was ordered, so it is not rounded. */
+function siliconText(steps: readonly StepResult[]): string {
+  const thicknesses = steps.map(({ silicon }) => silicon);
+  const [most, least] = [Math.max(...thicknesses), Math.min(...thicknesses)];
+  const end = formatQuantity(least, "length", { unit: "µm" });
+  return most === least ? end : `${formatBare(most, "length", "µm")} to ${end}`;
+}
+
+/** Beyond this a step is warm, K. */
+const WARM = 303.15;
+
+/** '230 °C, 120 min, steps 3 and 8', or room temperature. */
+function hottestText(steps: readonly StepResult[]): string {
+  const peak = Math.max(...steps.map(({ peakTemperature }) => peakTemperature));
+  if (peak <= WARM) return "room temperature";
+  const hottest = steps.filter(({ peakTemperature }) => peakTemperature === peak);
+  const longest = Math.max(0, ...hottest.map(({ holdTime }) => holdTime ?? 0));
+  const minutes = longest > 0 ? `, ${formatQuantity(longest, "time", { unit: "min" })}` : "";
+  return `${celsius(peak)}${minutes}, ${stepsInWords(hottest.map(({ number }) => number))}`;
+}
+
+/** The step that lies least flat; null when it is held flat throughout. */
+function worstShape(steps: readonly StepResult[]): StepResult | null {
+  return steps.reduce<StepResult | null>(
+    (worst, step) => (step.atRoom && (!worst?.atRoom || step.atRoom.warp > worst.atRoom.warp) ? step : worst),
+    null,
+  );
+}
+
+/** How it lies as loaded, the worst of each direction. */
+function shapeLines(steps: readonly StepResult[]): string[] {
+  const bent = steps.filter(({ lies }) => lies !== "flat").flatMap(({ atRoom }) => (atRoom ? [atRoom] : []));
+  if (bent.length === 0) return [steps.some(({ atRoom }) => atRoom) ? "flat" : "held flat"];
+  const rolled = bent.filter(isRolled);
+  if (rolled.length > 0) return [`rolls up, radius about ${roundedRadius(Math.min(...rolled.map(radius)))}`];
+  return [
+    ...largest(bent, true).map((warp) => `edges up ${roundedWarp(warp)}`),
+    ...largest(bent, false).map((warp) => `edges down ${roundedWarp(warp)}`),
+  ];
+}
+
+const radius = ({ rollRadius }: ShapeResult & { rollRadius: number }) => rollRadius;
+
+function largest(shapes: readonly ShapeResult[], edgesUp: boolean): number[] {
+  const warps = shapes.filter((shape) => shape.edgesUp === edgesUp).map(({ warp }) => warp);
+  return warps.length === 0 ? [] : [Math.max(...warps)];
+}
+
+function stopView({ steps, holding }: SheetGroup, before: StepResult | null): SheetGroupView["stop"] {
+  const lines = stopLines(steps, before);
+  if (lines.length > 0) return { lines, how: "on the tool, as loaded" };
+  if (isTape(holding)) return { lines: ["An edge off the tape, or a crack"], how: "by eye" };
+  return { lines: ["No limit is known"], how: "ask before loading" };
+}
+
+const DEBOND_WORDS: Record<ReleaseMethod, string> = {
+  "thermal slide": "slide off hot",
+  "laser through glass": "laser through the glass",
+  "mechanical peel": "peel",
+  "laser through glass then peel": "laser through the glass, then peel",
+  "solvent through perforated carrier": "solvent through the carrier",
+};
+
+function bondView({ fromStep, toStep, carrier, material, release }: BondResult, steps: readonly StepResult[]) {
+  const debond = steps.find(({ number }) => number === toStep + 1);
+  return {
+    steps: stepsInWords(Array.from({ length: toStep - fromStep + 1 }, (_, index) => fromStep + index)),
+    carrier,
+    material,
+    debond: debond ? `step ${debond.number}, ${DEBOND_WORDS[release]}` : "not in this flow",
+  };
+}

@@ -1,0 +1,71 @@
+import type { TodayFlow, TodayGroup } from "#app/schemas/today.ts";
+
+/** Rows that a group shows; the rest is counted and one link away. */
+export const SHOWN = 6;
+
+type Assessed = TodayFlow & { newest: NonNullable<TodayFlow["newest"]> };
+
+export interface TodayGroups {
+  decisions: TodayGroup<Assessed>;
+  outOfDate: TodayGroup<Assessed>;
+  notAssessed: TodayGroup<TodayFlow>;
+}
+
+/**
+ * Parts flows by what they wait for, each group oldest first: not assessed yet; changed since the newest assessment, which then
+ * decides nothing any more; assessed and not clear. What is clear waits for nothing.
+ */
+export function groupFlows(flows: readonly TodayFlow[]): TodayGroups {
+  const assessed = flows.filter((flow): flow is Assessed => flow.newest !== null);
+  const stale = assessed.filter(({ updatedAt, newest }) => updatedAt > newest.at);
+  const current = assessed.filter(({ updatedAt, newest }) => updatedAt <= newest.at);
+  return {
+    decisions: group(
+      current.filter(({ newest }) => newest.outcome !== "clear"),
+      ({ newest }) => newest.at,
+    ),
+    outOfDate: group(stale, ({ updatedAt }) => updatedAt),
+    notAssessed: group(
+      flows.filter(({ newest }) => newest === null),
+      ({ updatedAt }) => updatedAt,
+    ),
+  };
+}
+
+function group<Row>(rows: Row[], since: (row: Row) => string): TodayGroup<Row> {
+  const sorted = rows.toSorted((a, b) => since(a).localeCompare(since(b)));
+  return { rows: sorted.slice(0, SHOWN), total: rows.length };
+}
+
+const COUNTS = [
+  "no",
+  "one",
+  "two",
+  "three",
+  "four",
+  "five",
+  "six",
+  "seven",
+  "eight",
+  "nine",
+  "ten",
+  "eleven",
+  "twelve",
+];
+const count = (number: number) => COUNTS[number] ?? String(number);
+
+/** What waits, in one sentence: 'Two flows need a decision and one assessment is out of date.' */
+export function headline({ decisions, outOfDate, notAssessed }: Record<keyof TodayGroups, { total: number }>): string {
+  const parts = [
+    part(decisions.total, "flow needs a decision", "flows need a decision"),
+    part(outOfDate.total, "assessment is out of date", "assessments are out of date"),
+    part(notAssessed.total, "flow is not assessed yet", "flows are not assessed yet"),
+  ].filter((text) => text !== null);
+  const [last] = parts.slice(-1);
+  if (last === undefined) return "Nothing waits for a decision.";
+  const sentence = parts.length === 1 ? last : `${parts.slice(0, -1).join(", ")} and ${last}`;
+  return `${sentence.charAt(0).toUpperCase()}${sentence.slice(1)}.`;
+}
+
+const part = (number: number, one: string, many: string) =>
+  number === 0 ? null : `${count(number)} ${number === 1 ? one : many}`;

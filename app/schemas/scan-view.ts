@@ -1,0 +1,55 @@
+import type { SourceKind } from "#app/engine/vocabulary.ts";
+import type { Working } from "#app/engine/working.ts";
+import type { ScanParameters, ScanResult } from "./scan-result.ts";
+
+/** A scan as a list shows it; SI, standard uncertainties. */
+export interface ScanRow {
+  id: string;
+  label: string;
+  program: string;
+  film: string | null;
+  diameter: number;
+  stress: number;
+  stressUncertainty: number;
+  /** standard bow, m */
+  bowChange: number;
+  bowUncertainty: number;
+  /** the wafer has rolled: there is neither a bow nor a stress to show */
+  curled: boolean;
+  createdAt: string;
+  createdBy: string;
+}
+
+/** The film of the library that a scan is compared with, at its stress of today. */
+export interface ScanFilm {
+  id: string;
+  name: string;
+  stress: number;
+  stressTolerance: number | null;
+  source: SourceKind;
+}
+
+/** A kept file; its name is that under which the same bytes first came. */
+export interface ScanFileView {
+  id: string;
+  name: string;
+  /** bytes */
+  size: number;
+  /** SHA-256, hex */
+  hash: string;
+}
+
+/** One scan, as its page shows it. */
+export interface ScanDetail {
+  id: string;
+  label: string;
+  program: { id: string; name: string; slug: string };
+  film: ScanFilm | null;
+  files: Record<"before" | "after", ScanFileView>;
+  parameters: ScanParameters;
+  result: ScanResult;
+  working: Working;
+  engineVersion: string;
+  createdAt: string;
+  createdBy: string;
+}

@@ -1,0 +1,60 @@
+import { z } from "zod";
+import { LIMIT_DEFINITIONS, type LimitDefinition, type LimitKey } from "#app/engine/rules/limits.ts";
+import { limitQuantity } from "#app/lib/limit-quantity.ts";
+import type { PhysicalRange } from "#app/lib/read-quantity.ts";
+import { quantity } from "./quantity.ts";
+
+const definitions: Record<LimitKey, LimitDefinition> = LIMIT_DEFINITIONS;
+
+/** Limits of every kind with the widest range that makes sense of them. */
+function rangeOf({ unit, temperaturePoint }: LimitDefinition): PhysicalRange {
+  switch (unit) {
+    case "m":
+      return { least: 0, most: 2e-3, words: "0 to 2 mm" };
+    case "K":
+      return temperaturePoint
+        ? { least: 273.15, most: 673.15, words: "0 °C to 400 °C" }
+        : { least: 0, most: 200, words: "0 to 200 K" };
+    case "1":
+      return { least: 0, most: 1, words: "0 to 100 %" };
+  }
+}
+
+/** A limit as the person saw it when the form was filled: what differs from it was changed by them. */
+const opened = z.object({ version: z.number().int(), value: z.number(), source: z.string() });
+
+const limitFields = (definition: LimitDefinition) =>
+  z.object({
+    value: quantity({ label: "limit", dimension: limitQuantity(definition).dimension, range: rangeOf(definition) }),
+    source: z
+      .string("Say where the limit comes from.")
+      .trim()
+      .min(1, "Say where the limit comes from.")
+      .max(200, "Keep it under 200 characters."),
+    opened,
+  });
+export type LimitChange = z.output<ReturnType<typeof limitFields>>;
+
+/** The form of the limits that one rule judges by. */
+export function limitsSchema(keys: readonly LimitKey[]): z.ZodType<Partial<Record<LimitKey, LimitChange>>> {
+  return z.object(Object.fromEntries(keys.map((key) => [key, limitFields(definitions[key])])));
+}
+
+/** Pairs of which the first must be at least the second, or the rules would contradict each other. */
+const AT_LEAST: readonly (readonly [LimitKey, LimitKey])[] = [
+  ["bareFrom150", "gripperFrom150"],
+  ["bareFrom200", "gripperFrom200"],
+  ["bareFrom300", "gripperFrom300"],
+  ["gripperFrom150", "carrierBelow"],
+  ["gripperFrom200", "carrierBelow"],
+  ["gripperFrom300", "carrierBelow"],
+  ["processCarrierBelow", "edgeRingFrom"],
+  ["edgeRingFrom", "edgeRingLeast"],
+  ["edgeRingLeast", "carrierBelow"],
+  ["carrierBelow", "tapeInLineFrom"],
+];
+
+/** Pairs of limits that contradict each other. */
+export function contradictions(values: Readonly<Record<LimitKey, number>>): { more: LimitKey; less: LimitKey }[] {
+  return AT_LEAST.filter(([more, less]) => values[more] < values[less]).map(([more, less]) => ({ more, less }));
+}

@@ -1,0 +1,81 @@
+import { raw, type QueryOrderMap } from "@mikro-orm/postgresql";
+import { Assessment } from "#app/db/entities/assessment.ts";
+import { OUTCOMES, type Outcome } from "#app/engine/vocabulary.ts";
+import { PAGE_SIZE, type ListPage, type ListParams } from "#app/lib/list-params.ts";
+import { inScope, type ActorScope } from "#app/server/scope.server.ts";
+import { escapeLike } from "../like.server.ts";
+import { programFilter } from "../program-filter.server.ts";
+
+export const ASSESSMENT_SORTS = ["run", "flow", "outcome"] as const;
+
+export interface AssessmentRow {
+  id: string;
+  documentNumber: number;
+  flow: string;
+  program: string;
+  programSlug: string;
+  outcome: Outcome;
+  createdAt: string;
+  createdBy: string;
+  /** the flow itself has been changed since */
+  flowChanged: boolean;
+}
+
+/** What a list shows: results are long, and it needs nothing of them. */
+const LISTED = [
+  "id",
+  "documentNumber",
+  "flowName",
+  "outcome",
+  "createdAt",
+  "program.name",
+  "program.slug",
+  "createdBy.name",
+  "flow.updatedAt",
+] as const;
+
+/** A page of the newest assessment of each flow that the person may see: those that a sheet would be printed from. */
+export async function listNewestAssessments(scope: ActorScope, params: ListParams): Promise<ListPage<AssessmentRow>> {
+  return inScope(scope, async (em) => {
+    const newest = await em.execute<{ id: string }[]>(
+      "select distinct on (flow_id) id from assessment order by flow_id, number desc",
+    );
+    const outcome = OUTCOMES.find((word) => word === params.filters["outcome"]);
+    const [assessments, total] = await em.findAndCount(
+      Assessment,
+      {
+        id: { $in: newest.map(({ id }) => id) },
+        program: programFilter(scope.actor, "see the work", params.filters["program"]),
+        ...(outcome ? { outcome } : {}),
+        ...(params.query ? { flowName: { $ilike: `%${escapeLike(params.query)}%` } } : {}),
+      },
+      {
+        fields: [...LISTED],
+        orderBy: [orderOf(params), { id: "asc" }],
+        limit: PAGE_SIZE,
+        offset: (params.page - 1) * PAGE_SIZE,
+      },
+    );
+    const rows = assessments.map((assessment): AssessmentRow => ({
+      id: assessment.id,
+      documentNumber: assessment.documentNumber,
+      flow: assessment.flowName,
+      program: assessment.program.name,
+      programSlug: assessment.program.slug,
+      outcome: assessment.outcome,
+      createdAt: assessment.createdAt.toISOString(),
+      createdBy: assessment.createdBy.name,
+      flowChanged: assessment.flow.updatedAt > assessment.createdAt,
+    }));
+    return { rows, total, params };
+  });
+}
+
+/** Newest first; outcomes by how bad they are, not by their letters. */
+function orderOf({ sort, descending }: ListParams): QueryOrderMap<Assessment> {
+  const direction = descending ? "desc" : "asc";
+  if (sort === "flow") return { flowName: direction };
+  if (sort !== "outcome") return { createdAt: descending ? "asc" : "desc" };
+  const words = OUTCOMES.map((word) => `'${word}'`).join(", ");
+  return { [raw((alias) => `array_position(array[${words}]::text[], ${alias}.outcome)`)]: direction };
+}

@@ -1,0 +1,56 @@
+import type { Measured } from "#app/engine/measured.ts";
+import { planColumns } from "#app/lib/flow-plan.ts";
+import { stepRows, type StepRow } from "#app/lib/flow-rows.ts";
+import { inScope, type ActorScope } from "#app/server/scope.server.ts";
+import type { RecordStamp } from "../record.server.ts";
+import { idFrom } from "../uuid.server.ts";
+import { flowAssessments, type FlowAssessmentRow } from "./flow-assessments.server.ts";
+import { readFlow } from "./read-flow.server.ts";
+
+/** A flow as its page shows it: text, not the materials behind it. */
+export interface FlowPage {
+  id: string;
+  name: string;
+  note: string;
+  program: string;
+  silicon: { name: string; diameter: number };
+  incoming: Measured;
+  /** thinnest silicon of the flow, and its hottest step; SI, null without steps */
+  thinnest: Measured | null;
+  hottest: number | null;
+  rows: StepRow[];
+  plan: ReturnType<typeof planColumns>;
+  /** newest first */
+  assessments: FlowAssessmentRow[];
+  stamp: RecordStamp;
+  mayEdit: boolean;
+  mayAssess: boolean;
+}
+
+/** One flow with its rows, its plan to draw and its assessments, newest first. */
+export async function flowPage(scope: ActorScope, flowId: string | undefined): Promise<FlowPage> {
+  const id = idFrom(flowId, "flow");
+  const { flow, assessments } = await inScope(scope, async (em) => {
+    const found = await readFlow(em, scope, id);
+    return { flow: found, assessments: await flowAssessments(em, found) };
+  });
+  const { silicon, incomingThickness, steps } = flow;
+  const thicknesses = [incomingThickness, ...steps.flatMap(({ siliconAfter }) => siliconAfter ?? [])];
+  return {
+    id: flow.id,
+    name: flow.name,
+    note: flow.note,
+    program: flow.program.name,
+    silicon: { name: silicon.name, diameter: silicon.diameter },
+    incoming: incomingThickness,
+    thinnest:
+      steps.length === 0 ? null : thicknesses.reduce((least, next) => (next.value < least.value ? next : least)),
+    hottest: steps.length === 0 ? null : Math.max(...steps.map(({ peakTemperature }) => peakTemperature)),
+    rows: stepRows(steps, incomingThickness),
+    plan: planColumns(steps, incomingThickness),
+    assessments,
+    stamp: flow.stamp,
+    mayEdit: flow.mayEdit,
+    mayAssess: flow.mayAssess,
+  };
+}

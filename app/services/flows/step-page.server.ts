@@ -1,0 +1,80 @@
+import type { StepChoices } from "#app/lib/flow-step-choices.ts";
+import { waferBefore, type WaferBefore } from "#app/lib/flow-wafer-before.ts";
+import { notFound } from "#app/server/problem.server.ts";
+import type { ActorScope } from "#app/server/scope.server.ts";
+import { requireInProgram } from "../permission.server.ts";
+import { idFrom } from "../uuid.server.ts";
+import { flowInputOf, type FlowDetail, type StepDetail } from "./flow-detail.ts";
+import { getFlow } from "./flows.server.ts";
+import { stepChoices } from "./step-choices.server.ts";
+import { stepNumber } from "./step-number.ts";
+
+/** What stands around a step's form. */
+export interface StepSurroundings {
+  flow: { id: string; name: string; version: number };
+  /** number of steps in the flow */
+  of: number;
+  before: WaferBefore | null;
+}
+
+const surroundings = (flow: FlowDetail, index: number): StepSurroundings => ({
+  flow: { id: flow.id, name: flow.name, version: flow.stamp.version },
+  of: flow.steps.length,
+  before: waferBefore(flowInputOf(flow), index),
+});
+
+export interface StepPage extends StepSurroundings {
+  step: StepDetail;
+  /** from 1 */
+  number: number;
+  previous: string | null;
+  next: string | null;
+  mayEdit: boolean;
+  /** null for those who may only read */
+  choices: StepChoices | null;
+}
+
+/** One step of a flow; with what can be chosen when the person may change it. */
+export async function stepPage(
+  scope: ActorScope,
+  { flowId, stepId }: { flowId: string | undefined; stepId: string | undefined },
+): Promise<StepPage> {
+  const flow = await getFlow(scope, flowId);
+  const id = idFrom(stepId, "step");
+  const index = flow.steps.findIndex((step) => step.id === id);
+  const step = flow.steps[index];
+  if (!step) throw notFound("step");
+  return {
+    ...surroundings(flow, index),
+    step,
+    number: index + 1,
+    previous: flow.steps[index - 1]?.id ?? null,
+    next: flow.steps[index + 1]?.id ?? null,
+    mayEdit: flow.mayEdit,
+    choices: flow.mayEdit ? await stepChoices(scope) : null,
+  };
+}
+
+export interface NewStepPage extends StepSurroundings {
+  /** from 1: the number that the new step gets */
+  number: number;
+  /** what holds the wafer at the step before */
+  planned: StepDetail["planned"];
+  choices: StepChoices;
+}
+
+/** A place for a new step: before the one that has number `at` now, at the end by default. */
+export async function newStepPage(
+  scope: ActorScope,
+  { flowId, at }: { flowId: string | undefined; at: string | null },
+): Promise<NewStepPage> {
+  const flow = await getFlow(scope, flowId);
+  requireInProgram(scope, "edit stacks and flows", flow.program.id, "flow");
+  const number = stepNumber(at, flow.steps.length);
+  return {
+    ...surroundings(flow, number - 1),
+    number,
+    planned: flow.steps[number - 2]?.planned ?? "bare",
+    choices: await stepChoices(scope),
+  };
+}

@@ -1,0 +1,36 @@
+import type { RuleText } from "#app/components/method/RuleEntry.tsx";
+import { LIMIT_DEFINITIONS, type LimitDefinition, type LimitKey } from "#app/engine/rules/limits.ts";
+import { RULES } from "#app/engine/rules/rules.ts";
+import { formatQuantity } from "#app/engine/units/format.ts";
+import { mayOnSite } from "#app/policies/permissions.ts";
+import type { ActorScope } from "#app/server/scope.server.ts";
+import { siteLimits } from "./limits.server.ts";
+
+/** The handling rules in words; with the site's limits for those who may see the library. */
+export async function ruleTexts(scope: ActorScope): Promise<RuleText[]> {
+  const limits = mayOnSite(scope.actor, "see the library") ? await siteLimits(scope) : null;
+  return RULES.map(({ number, title, asks, limits: keys }) => ({
+    number,
+    title,
+    asks,
+    limits: limits && keys.map((key) => limitText(key, limits[key])),
+  }));
+}
+
+function limitText(key: LimitKey, { value, source }: { value: number; source: string }) {
+  const definition: LimitDefinition = LIMIT_DEFINITIONS[key];
+  const delivered = definition.value === value ? null : limitValue(definition.value, definition);
+  return { title: definition.title, value: limitValue(value, definition), delivered, source };
+}
+
+function limitValue(value: number, { unit, temperaturePoint }: LimitDefinition): string {
+  if (temperaturePoint) return formatQuantity(value, "temperature", { unit: "°C" });
+  switch (unit) {
+    case "m":
+      return formatQuantity(value, "length", { unit: "µm" });
+    case "K":
+      return formatQuantity(value, "temperatureDifference", { unit: "K" });
+    case "1":
+      return formatQuantity(value, "fraction", { unit: "%" });
+  }
+}

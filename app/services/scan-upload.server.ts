@@ -1,0 +1,121 @@
+import { createHash, randomUUID } from "node:crypto";
+import { UniqueConstraintViolationException, type EntityManager } from "@mikro-orm/postgresql";
+import { Film } from "#app/db/entities/film.ts";
+import { ScanFile } from "#app/db/entities/scan-file.ts";
+import { Scan } from "#app/db/entities/scan.ts";
+import { EngineInputError } from "#app/engine/errors.ts";
+import { ENGINE_VERSION } from "#app/engine/version.ts";
+import { excerpt } from "#app/lib/excerpt.ts";
+import { readProfile, type ReadProfile } from "#app/lib/profile-csv.ts";
+import { checkOnWafer, checkTogether } from "#app/lib/profile-on-wafer.ts";
+import { ProfileFileError } from "#app/lib/profile-text.ts";
+import type { ScanResult } from "#app/schemas/scan-result.ts";
+import type { ScanValues } from "#app/schemas/scan.ts";
+import { inScope, type ActorScope } from "#app/server/scope.server.ts";
+import type { UploadedFile } from "#app/server/upload.server.ts";
+import { requireInProgram } from "./permission.server.ts";
+import { scanResult } from "./scan-result-of.ts";
+
+export type Refused = { outcome: "refused"; field: "before" | "after" | "film" | ""; reason: string };
+export type Uploaded = { outcome: "stored"; id: string } | Refused;
+
+interface ScanFiles {
+  before: UploadedFile;
+  after: UploadedFile;
+}
+
+/**
+ * Reads two profiles, computes the film's stress and stores raw files, inputs and result in one transaction. A pair that cannot be
+ * read or computed leaves nothing behind and comes back with the reason.
+ */
+export async function uploadScan(scope: ActorScope, values: ScanValues, files: ScanFiles): Promise<Uploaded> {
+  requireInProgram(scope, "upload scans", values.program, "program");
+  const computed = computeScan(values, files);
+  if ("outcome" in computed) return computed;
+  try {
+    return await keepScan(scope, values, files, computed.result);
+  } catch (error) {
+    // Somebody stored the same file at the same moment: it is there now, and the second time finds it.
+    if (error instanceof UniqueConstraintViolationException) return keepScan(scope, values, files, computed.result);
+    throw error;
+  }
+}
+
+function computeScan(values: ScanValues, files: ScanFiles): { result: ScanResult } | Refused {
+  const read = (which: "before" | "after"): ReadProfile => {
+    const profile = readProfile(files[which].bytes, files[which].name, values);
+    checkOnWafer(profile, excerpt(files[which].name, 80), values);
+    return profile;
+  };
+  let reading: "before" | "after" = "before";
+  try {
+    const before = read("before");
+    reading = "after";
+    if (digest(files.before.bytes) === digest(files.after.bytes))
+      throw new ProfileFileError(
+        `${excerpt(files.after.name, 80)} holds the same bytes as the file before the film. Choose the scan after it.`,
+      );
+    const after = read("after");
+    checkTogether({ name: files.before.name, profile: before }, { name: files.after.name, profile: after }, values);
+    return { result: scanResult(values, before, after) };
+  } catch (error) {
+    if (error instanceof ProfileFileError) return { outcome: "refused", field: reading, reason: error.message };
+    if (error instanceof EngineInputError)
+      return {
+        outcome: "refused",
+        field: "",
+        reason: `The two scans give no curvature: the ${error.field === "points" ? "points" : error.field} ${error.reason}.`,
+      };
+    throw error;
+  }
+}
+
+const digest = (bytes: Uint8Array) => createHash("sha256").update(bytes).digest("hex");
+
+function keepScan(scope: ActorScope, values: ScanValues, files: ScanFiles, result: ScanResult): Promise<Uploaded> {
+  return inScope(scope, async (em): Promise<Uploaded> => {
+    const film = values.film ? await em.findOne(Film, { id: values.film }) : null;
+    if (values.film && !film)
+      return { outcome: "refused", field: "film", reason: "That film is no longer in the library. Choose another." };
+    const { program: _program, label: _label, film: _film, ...parameters } = values;
+    const scan = em.create(Scan, {
+      id: randomUUID(),
+      program: values.program,
+      label: values.label,
+      film,
+      before: await keepFile(em, scope, values.program, files.before),
+      after: await keepFile(em, scope, values.program, files.after),
+      parameters,
+      result,
+      engineVersion: ENGINE_VERSION,
+      createdAt: new Date(),
+      createdBy: scope.actor.id,
+    });
+    await em.flush();
+    return { outcome: "stored", id: scan.id };
+  });
+}
+
+/** The same bytes are kept once in a program, under the name they first came with. */
+async function keepFile(
+  em: EntityManager,
+  scope: ActorScope,
+  programId: string,
+  file: UploadedFile,
+): Promise<ScanFile> {
+  const hash = digest(file.bytes);
+  const known = await em.findOne(ScanFile, { program: programId, hash });
+  if (known) return known;
+  const kept = em.create(ScanFile, {
+    id: randomUUID(),
+    program: programId,
+    name: file.name,
+    hash,
+    size: file.bytes.length,
+    bytes: Buffer.from(file.bytes),
+    createdAt: new Date(),
+    createdBy: scope.actor.id,
+  });
+  await em.flush();
+  return kept;
+}

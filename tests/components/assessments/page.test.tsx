@@ -1,0 +1,89 @@
+import { describe, expect, it } from "vitest";
+import { createRoutesStub } from "react-router";
+import { AssessmentPage } from "#app/components/assessments/AssessmentPage.tsx";
+import { assessmentView, type AssessmentHead } from "#app/lib/assessment-view.ts";
+import { attributes, render, words } from "#tests/components/drawings/render.ts";
+import { demoResult, HEAD } from "#tests/fixtures/demo-assessment.ts";
+
+interface Shown {
+  flow?: string;
+  step?: string;
+  head?: Partial<AssessmentHead>;
+  refused?: { step: number | null; reason: string };
+}
+
+/** The page as the server sends it. */
+function page({ flow = "Petrel", step, head, refused }: Shown = {}): string {
+  const view = assessmentView({ ...HEAD, ...head }, demoResult(flow), step ?? null);
+  const Stub = createRoutesStub([{ path: "/", Component: () => <AssessmentPage view={view} refused={refused} /> }]);
+  return render(<Stub initialEntries={["/"]} />);
+}
+
+const count = (markup: string, text: string | RegExp) => markup.split(text).length - 1;
+
+describe("the assessment page", () => {
+  it("puts the answer first: outcome, then the sentences as its only first heading", () => {
+    const markup = page();
+    expect(count(markup, "<h1")).toBe(1);
+    expect(words(markup)).toMatch(/Caution first at step \d+ Runs with cautions: /);
+    expect(markup.indexOf("<h1")).toBeLessThan(markup.indexOf("Steps on one axis"));
+  });
+
+  it("shows every step as a link that works without scripts", () => {
+    const links = attributes(page(), "href");
+    for (let step = 1; step <= 21; step += 1) expect(links).toContain(`?step=${step}#step-${step}`);
+  });
+
+  it("opens the step that is asked for, in strip, table and list", () => {
+    const markup = page({ step: "12" });
+    expect(count(markup, 'aria-current="step"')).toBe(3);
+    expect(markup).toMatch(/<tr id="step-12"[^>]*aria-current="true"/);
+    expect(words(markup)).toContain("Inputs that matter most at step 12");
+  });
+
+  it("gives why, figures with their working, limit with its source, remedy, and what happens if let go", () => {
+    const markup = page();
+    const text = words(markup);
+    for (const term of ["Why", "Figures", "Limit", "Clears with", "Lies as", "When hot", "If let go"])
+      expect(text).toContain(term);
+    expect(text).toContain("400 µm (supplier)");
+    expect(attributes(markup, "href").filter((path) => path.includes("/working?")).length).toBeGreaterThan(4);
+    expect(markup).toContain("<details>");
+    expect(text).toMatch(/\d clear findings?/);
+  });
+
+  it("offers to run again and to change the flow to those only who may", () => {
+    expect(words(page())).toMatch(/Change the flow Run again Print the sheet/);
+    const reader = words(page({ head: { mayAssess: false } }));
+    expect(reader).not.toMatch(/Run again|Change the flow/);
+    expect(reader).toContain("Print the sheet");
+  });
+
+  it("says when it is out of date, and makes running again the one filled button", () => {
+    const markup = page({ head: { outOfDate: true } });
+    expect(words(markup)).toContain("Out of date: the flow, or something that it uses, has changed since");
+    expect(count(markup, "btn-primary")).toBe(1);
+    expect(markup).toMatch(/btn-primary[^>]*>Run again/);
+    // A technician can only read that it is old.
+    expect(page({ head: { outOfDate: true, mayAssess: false } })).not.toContain("Run again");
+  });
+
+  it("says why a flow could not be computed, at the step that stops it", () => {
+    const text = words(page({ refused: { step: 4, reason: "no silicon would be left after this step" } }));
+    expect(text).toContain(
+      "cannot be computed, so nothing was stored Step 4: no silicon would be left after this step",
+    );
+  });
+
+  it("says of a clear flow that there is nothing to clear, and folds a long list of remedies", () => {
+    expect(words(page({ flow: "Tern" }))).toContain("Nothing to clear: every step is clear as planned.");
+    expect(words(page({ flow: "Petrel, glass 7.2 ppm" }))).not.toContain("Nothing to clear");
+  });
+
+  it("carries title block, cautions, engine and time of the inputs", () => {
+    const text = words(page());
+    expect(text).toContain("Number TERN-A003");
+    expect(text).toContain("razor-sharp");
+    expect(text).toContain("Engine 0.1.0, inputs of 2026-12-01 11:10 UTC");
+  });
+});

@@ -1,0 +1,87 @@
+import { createRoutesStub } from "react-router";
+import { describe, expect, it } from "vitest";
+import { TodayForGuest } from "#app/components/today/TodayForGuest.tsx";
+import { TodayPage } from "#app/components/today/TodayPage.tsx";
+import type { TodayAssessed, TodayView } from "#app/schemas/today.ts";
+import { render, words } from "#tests/components/drawings/render.ts";
+import { strangeCharacters } from "#tests/components/glyphs.ts";
+
+const none = { rows: [], total: 0 };
+const PROGRAM = { id: "1", name: "Tern", slug: "tern", diameter: 0.2, purpose: "To 100 µm", flows: 1, stacks: 1 };
+const EMPTY: TodayView = {
+  now: "2026-12-01T07:40:00.000Z",
+  works: true,
+  mayAssess: true,
+  mayUpload: true,
+  decisions: none,
+  outOfDate: none,
+  notAssessed: none,
+  scans: [],
+  programs: [PROGRAM],
+};
+const ASSESSED: TodayAssessed = {
+  id: "flow",
+  name: "Tern T-2",
+  program: "Tern",
+  updatedAt: "2026-11-30T07:40:00.000Z",
+  mayAssess: true,
+  newest: { id: "assessment", number: 14, outcome: "do not run", at: "2026-11-30T08:00:00.000Z" },
+  sentence: "Step 9, Coat: Edges up 313 ± 39 µm as it leaves; the coater takes 300 µm edges up.",
+  diameter: 0.2,
+  wafer: null,
+};
+
+function shown(view: TodayView): string {
+  const Page = view.works ? TodayPage : TodayForGuest;
+  const Stub = createRoutesStub([{ path: "/", Component: () => <Page view={view} /> }]);
+  return render(<Stub initialEntries={["/"]} />);
+}
+const text = (view: TodayView) => words(shown(view)).replaceAll("\u00A0", " ");
+
+describe("Today", () => {
+  it("says what waits, since when, and where to look", () => {
+    const markup = shown({ ...EMPTY, decisions: { rows: [ASSESSED], total: 1 } });
+    expect(words(markup)).toMatch(
+      /^Today One flow needs a decision\. 2026-12-01, 07:40 UTC Needs a decision oldest first/,
+    );
+    expect(markup).toContain('href="/assessments/assessment"');
+    expect(markup).toContain('aria-label="See why: Tern T-2, assessment 14"');
+    expect(strangeCharacters(markup)).toEqual([]);
+  });
+
+  it("offers to run again only to those who may", () => {
+    const stale = (mayAssess: boolean) =>
+      text({ ...EMPTY, outOfDate: { rows: [{ ...ASSESSED, mayAssess }], total: 1 } });
+    expect(stale(true)).toMatch(/Do not run before the change Run again/);
+    expect(stale(false)).toMatch(/Do not run before the change See the flow/);
+  });
+
+  it("tells how many more there are", () => {
+    const markup = shown({ ...EMPTY, decisions: { rows: [ASSESSED], total: 9 } });
+    expect(words(markup)).toContain("Nine flows need a decision. ");
+    expect(words(markup)).toContain("8 more");
+  });
+
+  it("begins with the scans for those who assess nothing", () => {
+    const order = text({ ...EMPTY, mayAssess: false, decisions: { rows: [ASSESSED], total: 1 } });
+    expect(order.indexOf("Latest scans")).toBeLessThan(order.indexOf("Needs a decision oldest"));
+  });
+
+  it("leads from films over the first stack to the first flow where nothing is set", () => {
+    const programs = [{ ...PROGRAM, flows: 0, stacks: 0 }];
+    const markup = shown({ ...EMPTY, programs });
+    for (const to of ["/films", "/stacks/new", "/flows/new"]) expect(markup).toContain(`href="${to}"`);
+    expect(text({ ...EMPTY, programs, mayAssess: false })).toMatch(/An engineer of your program starts/);
+  });
+
+  it("shows a guest programs and no counts, and says that nothing is released", () => {
+    const guest = text({ ...EMPTY, works: false, mayAssess: false, mayUpload: false });
+    expect(guest).toMatch(/^Today No sheet has been released to you yet\./);
+    expect(guest).toMatch(/Tern To 100 µm 200 mm/);
+    expect(guest).not.toMatch(/Flows|Stacks|scan/);
+  });
+
+  it("says so where somebody belongs to no program", () => {
+    expect(text({ ...EMPTY, works: false, programs: [] })).toMatch(/You do not belong to a program yet/);
+  });
+});

@@ -1,0 +1,106 @@
+import { describe, expect, it } from "vitest";
+import { lyingAs } from "#app/lib/lying-as.ts";
+import { groupFlows, headline, SHOWN } from "#app/lib/today-groups.ts";
+import type { Outcome } from "#app/engine/vocabulary.ts";
+import type { ShapeResult } from "#app/schemas/assessment-result.ts";
+import type { TodayFlow } from "#app/schemas/today.ts";
+
+const day = (number: number) => `2026-11-${String(number).padStart(2, "0")}T08:00:00.000Z`;
+
+/** A flow changed on a day of November and, unless left out, assessed on another. */
+function flow(id: string, changed: number, assessed?: number, outcome: Outcome = "caution"): TodayFlow {
+  return {
+    id,
+    name: id,
+    program: "Tern",
+    updatedAt: day(changed),
+    mayAssess: true,
+    newest: assessed === undefined ? null : { id: `${id}-1`, number: 1, outcome, at: day(assessed) },
+  };
+}
+
+const ids = ({ rows }: { rows: TodayFlow[] }) => rows.map(({ id }) => id);
+
+describe("flows by what they wait for", () => {
+  it("a decision while assessed, unchanged since, and not clear; the longest waiting first", () => {
+    const { decisions, outOfDate, notAssessed } = groupFlows([
+      flow("later", 1, 9, "do not run"),
+      flow("clear", 1, 2, "clear"),
+      flow("earlier", 1, 3, "cannot judge"),
+    ]);
+    expect(ids(decisions)).toEqual(["earlier", "later"]);
+    expect([outOfDate.total, notAssessed.total]).toEqual([0, 0]);
+  });
+
+  it("out of date once changed after its newest assessment, whatever that had said", () => {
+    const { decisions, outOfDate } = groupFlows([
+      flow("was clear", 6, 5, "clear"),
+      flow("was not", 5, 4, "do not run"),
+    ]);
+    expect(ids(outOfDate)).toEqual(["was not", "was clear"]);
+    expect(decisions.total).toBe(0);
+  });
+
+  it("changed at the very moment of the assessment is what was assessed", () => {
+    expect(groupFlows([flow("same", 5, 5)]).outOfDate.total).toBe(0);
+  });
+
+  it("not assessed at all", () => {
+    expect(ids(groupFlows([flow("new", 7), flow("old", 2)]).notAssessed)).toEqual(["old", "new"]);
+  });
+
+  it("shows the first and counts all", () => {
+    const { notAssessed } = groupFlows(Array.from({ length: SHOWN + 3 }, (_, n) => flow(String(n), n + 1)));
+    expect(notAssessed.rows).toHaveLength(SHOWN);
+    expect(notAssessed.total).toBe(SHOWN + 3);
+  });
+});
+
+describe("the sentence at the top", () => {
+  it.each<[decisions: number, outOfDate: number, notAssessed: number, sentence: string]>([
+    [0, 0, 0, "Nothing waits for a decision."],
+    [1, 0, 0, "One flow needs a decision."],
+    [2, 1, 0, "Two flows need a decision and one assessment is out of date."],
+    [0, 2, 3, "Two assessments are out of date and three flows are not assessed yet."],
+    [2, 1, 1, "Two flows need a decision, one assessment is out of date and one flow is not assessed yet."],
+    [0, 0, 14, "14 flows are not assessed yet."],
+  ])("%i, %i and %i", (decisions, outOfDate, notAssessed, sentence) => {
+    expect(
+      headline({
+        decisions: { total: decisions },
+        outOfDate: { total: outOfDate },
+        notAssessed: { total: notAssessed },
+      }),
+    ).toBe(sentence);
+  });
+});
+
+describe("a wafer as it lies", () => {
+  const shape: ShapeResult = {
+    temperature: 298.15,
+    bow: -2e-4,
+    warp: 2e-4,
+    edgesUp: true,
+    regime: "nonlinear",
+    stabilityRatio: 0.2,
+    rollRadius: null,
+    standardUncertainty: null,
+    working: null,
+  };
+
+  it("has its centre low while its edges are up, whichever side is up", () => {
+    expect(lyingAs(shape)).toEqual({ kind: "bowed", bow: -2e-4 });
+    expect(lyingAs({ ...shape, bow: 2e-4 })).toEqual({ kind: "bowed", bow: -2e-4 });
+    expect(lyingAs({ ...shape, edgesUp: false })).toEqual({ kind: "bowed", bow: 2e-4 });
+  });
+
+  it("is a roll once curled, never a bow", () => {
+    expect(lyingAs({ ...shape, regime: "curled", rollRadius: 0.3 })).toEqual({
+      kind: "rolled",
+      radius: 0.3,
+      edgesUp: true,
+    });
+  });
+
+  it("is held where nothing is free", () => expect(lyingAs(null)).toEqual({ kind: "held" }));
+});
