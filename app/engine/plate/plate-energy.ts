@@ -31,6 +31,9 @@ export interface StretchEnergy {
   yy: number;
 }
 
+/** Squares of curvatures below which a plate counts as flat: the inverse of their own square still fits a number. */
+const FLAT = 1e-120;
+
 const place: TablePlace = { s: 1, x: 1, y: 0, yq: 0, ys: 0, yss: 0, ysq: 0 };
 const jet: Jet = { value: 0, x: 0, y: 0, xx: 0, xy: 0, yy: 0 };
 
@@ -47,7 +50,7 @@ export function softening(plate: PlateEnergy, shape: { mean: number; halfDiffere
 export function stretchEnergy({ lambda, rate, sum }: PlateEnergy, X: number, Y: number, result: StretchEnergy): void {
   const squares = X + Y;
   const product = X - Y;
-  const inverse = squares > 0 ? 1 / squares : 0;
+  const inverse = squares > FLAT ? 1 / squares : 0;
   const q = product * inverse;
   locate(squares, q, rate, place);
   evaluateJet(sum, place.x, place.y, jet);

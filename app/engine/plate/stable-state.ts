@@ -71,7 +71,7 @@ export function settleState(plate: PlateEnergy, load: CurvaturePair, start: Curv
       nextA = Math.abs(a + share * stepA);
       nextB = Math.abs(b + share * stepB);
       nextEnergy = energyAt(nextA, nextB);
-      if (nextEnergy <= energy + 1e-15 * Math.abs(energy) || share < 1e-4) break;
+      if (nextEnergy <= energy + 1e-15 * Math.abs(energy) || !(share >= 1e-4)) break;
       share /= 3;
     }
     const moved = Math.abs(nextA - a) + Math.abs(nextB - b);

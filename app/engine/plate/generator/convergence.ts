@@ -39,7 +39,7 @@ export function criticalByBisection(degree: number, ratios: ShearRatios, sort: "
   const [tau, bowl] = [ratios.along, sort === "bowl"];
   // Uniform curvature gives the right order of magnitude.
   const uniform = bowl ? Math.sqrt(tau / lambda) * (1 + tau) : (1 + 1 / tau) / Math.sqrt(lambda);
-  let [low, high] = [0.7 * uniform, 1.3 * uniform];
+  let [low, high] = [0.5 * uniform, 1.3 * uniform];
   let shape: Float64Array = new Float64Array(plate.size);
   for (let step = 0; step < 32; step += 1) {
     const size = (low + high) / 2;

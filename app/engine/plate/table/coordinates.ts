@@ -7,7 +7,8 @@
  *   y                     −1 to 1 across the shapes that can be stable at a given s: from where a saddle or a roll snaps
  *                         through, q = −tanh((1.95 + ν/2) s), to beyond where equal loads hold a roll, q = s (0.45 + 0.75 s²)
  *
- * Flat wafers up to the onset of rolling reach over that range by some hundredths, which the tables cover.
+ * Flat wafers up to the onset of rolling reach over that range by some hundredths, which the tables cover. No plate rests farther
+ * out: there a function of the tables keeps the value it has at the border, so that a search or a trial meets a sound one.
  */
 export interface TablePlace {
   s: number;
@@ -21,6 +22,8 @@ export interface TablePlace {
 }
 
 const SCALE = 3;
+/** How far out in y the tables are followed. */
+const FARTHEST = 1.07;
 
 /** s of a sum of squares. */
 export function slenderness(squares: number): number {
@@ -54,6 +57,13 @@ export function locate(squares: number, q: number, rate: number, place: TablePla
   const width = high - low;
   const slope = (highS - lowS) / width;
   const y = (2 * q - high - low) / width;
+  if (Math.abs(y) > FARTHEST) {
+    place.s = s;
+    place.x = 2 * s - 1;
+    place.y = y > 0 ? FARTHEST : -FARTHEST;
+    place.yq = place.ys = place.yss = place.ysq = 0;
+    return;
+  }
   const middle = (highS + lowS) / width;
   place.s = s;
   place.x = 2 * s - 1;
