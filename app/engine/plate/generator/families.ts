@@ -3,7 +3,7 @@ import type { TableSize } from "./build-table.ts";
 import { chebyshevPoints, type StateFamily } from "./states.ts";
 
 /** Isotropic plates, ν from 0 to 0.5. */
-export const ISOTROPIC_SIZE: TableSize = { along: 24, across: 16, energy: [18, 12, 6], measures: [16, 11, 5] };
+export const ISOTROPIC_SIZE: TableSize = { along: 24, across: 16, energy: [20, 14, 6], measures: [16, 11, 5] };
 
 export function isotropicFamilies(): StateFamily[] {
   return chebyshevPoints(7).map((z) => {
@@ -13,7 +13,7 @@ export function isotropicFamilies(): StateFamily[] {
 }
 
 /** Silicon (001), one family rolled about <100> and one about <110>; each fills a table of its own. */
-export const SILICON_SIZE: TableSize = { along: 24, across: 16, energy: [18, 12, 1], measures: [16, 11, 1] };
+export const SILICON_SIZE: TableSize = { along: 24, across: 16, energy: [20, 14, 1], measures: [16, 11, 1] };
 
 export function siliconFamilies(): { soft: StateFamily; hard: StateFamily } {
   const { along, between } = siliconRatios();
