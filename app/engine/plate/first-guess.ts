@@ -26,6 +26,7 @@ export function firstGuess({ tau, lambda }: PlateEnergy, load: CurvaturePair): C
   const half = b0 / (1 - beta * force);
   const product = force / (0.85 * slenderness(mean * mean + half * half) ** 3);
   if (force > 0.9 / beta) return { mean, halfDifference: Math.sqrt(Math.max(half * half, mean * mean - product)) };
-  if (force < -0.9 / lambda) return { mean: Math.sqrt(Math.max(mean * mean, half * half + product)), halfDifference: half };
+  if (force < -0.9 / lambda)
+    return { mean: Math.sqrt(Math.max(mean * mean, half * half + product)), halfDifference: half };
   return { mean, halfDifference: half };
 }

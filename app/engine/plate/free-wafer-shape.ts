@@ -61,7 +61,32 @@ export interface FreeWaferShape {
 /** The bow of small-deflection theory counts as right while it is within this share of the nonlinear one. */
 const LINEAR_WITHIN = 0.01;
 
-/** DOC */
+/**
+ * Shape that a free wafer takes, gravity left out, under the stress that would give it `linearCurvature` by small-deflection
+ * theory.
+ *
+ * `linear` while the small-deflection bow is within 1 % along both axes (of the larger one), `nonlinear` up to the onset of
+ * rolling, `curled` beyond it. The shape is the one that the load leads to as it grows; `alternatives` are those that another
+ * load could have led to and that stay under this one: a saddle's load past its snap has the roll about the other axis, bent the
+ * other way, until the load's own mean pushes it over; silicon (100) can hold a roll about its other <100> axis.
+ *
+ * From von Karman's plate solved in full and tabulated. Errors against several hundred solutions with a finer basis at random
+ * loads (`table/errors.ts`), up to 20 times the critical load and 20 times beyond that, ν from 0 to 0.45 and silicon (100):
+ * - bow along the axis that bends most 0.1 %, of a second shape 0.15 %; critical load 0.05 %, that of a saddle's snap 0.3 %,
+ * - bow across it 0.4 % of its own value or of a tenth of the one along it, whichever is more,
+ * - centre curvature 0.3 % along and, as across is measured, 1.3 % across; parabola 0.1 % and 0.4 %,
+ * - three-point bow 0.1 % of the bow along the axis, averaged over where the points lie; where they do adds up to 0.25 % for a roll,
+ * - warp of the whole surface 0.2 %.
+ * Beyond 400 times the critical load the tables go over into the exact limit of a long roll, and the error shrinks. A Poisson's
+ * ratio from 0.45 to 0.4999 is covered but was not measured.
+ *
+ * Bows are those of an arc of the wafer's own length. A roll that closes, more than half a turn from centre to rim, keeps the
+ * height of half a turn, twice the roll radius, as bow and warp. The film is uniform: a real wafer never starts to roll sharply,
+ * an uneven film, a notch or a wedge picks the axis early.
+ *
+ * Bad input throws `EngineInputError`. Source: own computation ('plate-von-karman', 'plate-endless-roll'); the uniform curvature
+ * of Freund 2000 is its approximation.
+ */
 export function freeWaferShape(i: FreeWaferShapeInput): FreeWaferShape {
   const { radius, thickness, scale, linear, load, kind } = dimensionless(i);
   const shape = plateShape(load, kind);
@@ -125,7 +150,12 @@ export function checkPlate(i: PlateInput): {
   const youngsModulus = requireModulus("youngsModulus", i.youngsModulus);
   const poissonsRatio = requireWithin("poissonsRatio", i.poissonsRatio, 0, 0.4999, "1");
   const crystal = i.crystal === undefined ? undefined : requireOrientation("crystal", i.crystal);
-  return { radius, thickness, biaxialModulus: youngsModulus / (1 - poissonsRatio), kind: { poissonsRatio, crystal, axes: requireAxes(i.axes) } };
+  return {
+    radius,
+    thickness,
+    biaxialModulus: youngsModulus / (1 - poissonsRatio),
+    kind: { poissonsRatio, crystal, axes: requireAxes(i.axes) },
+  };
 }
 
 function requireAxes(axes: string | undefined): "100" | "110" | undefined {

@@ -10,7 +10,8 @@ export function reachedState({ energy, criticalLoad, saddleLoad }: Plate, load: 
   const start = firstGuess(energy, load);
   // Past a bifurcation the search must not begin on the ridge.
   const rolling = load.mean / criticalLoad - 1;
-  if (rolling > 0) start.halfDifference = Math.max(start.halfDifference, Math.min(0.7, Math.sqrt(rolling)) * start.mean);
+  if (rolling > 0)
+    start.halfDifference = Math.max(start.halfDifference, Math.min(0.7, Math.sqrt(rolling)) * start.mean);
   const snapping = load.halfDifference / saddleLoad - 1;
   if (snapping > 0) start.mean = Math.max(start.mean, Math.min(0.5, Math.sqrt(snapping)) * start.halfDifference);
   return settleState(energy, load, start);

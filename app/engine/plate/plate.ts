@@ -70,7 +70,10 @@ export function blendedPlate(share: number): Plate {
   const { soft, hard } = siliconPlates();
   return {
     energy: blendedEnergy(share),
-    measures: { ...soft.measures, coefficients: blended(soft.measures.coefficients, hard.measures.coefficients, share) },
+    measures: {
+      ...soft.measures,
+      coefficients: blended(soft.measures.coefficients, hard.measures.coefficients, share),
+    },
     criticalLoad: soft.criticalLoad,
     saddleLoad: (1 - share) * soft.saddleLoad + share * hard.saddleLoad,
   };

@@ -1,5 +1,6 @@
 import type { Orientation } from "../silicon/orientation.ts";
 import { softening } from "./plate-energy.ts";
+import { readingsAtHighest } from "./highest-rim.ts";
 import { crossedState, reachedState, snappedState } from "./load-path.ts";
 import { isotropicPlate, siliconPlates, type Plate } from "./plate.ts";
 import { dipAcross, readingsOf, rimTop, type Readings } from "./readings.ts";
@@ -21,14 +22,14 @@ export interface PlateKind {
  * that the rest of the engine knows about large deflections is behind this file.
  */
 export interface PlateShape extends Readings {
-  /** The area mean of the curvature, which the load works on. */
+  /** The area mean of the curvature along its own principal axes. */
   average: CurvaturePair;
   /** Lowest point below the centre and highest above it, both zero or more, of the shape or of its mirror image. */
   dip: number;
   top: number;
   /** m of `plate-energy.ts` there: the share of the membrane's resistance to uniform curvature that is left. */
   softening: number;
-  /** Angle from the load's x axis to the axis that the readings call x, rad, −π/4 to π/4. */
+  /** Angle from the load's x axis to the axis that the readings call x, on which the rim is highest, rad, −π/4 to π/4. */
   turn: number;
   /** Load over the load at which the shape becomes unstable, as by `loadRatio`. */
   loadRatio: number;
@@ -47,8 +48,7 @@ export function criticalLoad(kind: PlateKind): number {
 /** The shape under a load given as the two curvatures of small deflections. */
 export function plateShape(load: CurvaturePair, kind: PlateKind): PlateShape {
   const size = { mean: Math.abs(load.mean), halfDifference: Math.abs(load.halfDifference) };
-  const { plate, state, turn } = mainState(size, kind);
-  const readings = readingsOf(plate, state);
+  const { plate, state, turn, readings } = mainState(size, kind);
   const straight = straightPlate(kind);
   const bows = alternativeBows(size, kind, straight, state).filter((bow) => !sameShape(bow, readings.bow));
   const turned = turn === 0 ? 0 : turn * sign(load.halfDifference);
@@ -73,17 +73,29 @@ function straightPlate({ crystal, axes, poissonsRatio }: PlateKind): Plate {
   return axes === "110" ? siliconPlates().hard : siliconPlates().soft;
 }
 
-function mainState(load: CurvaturePair, kind: PlateKind): { plate: Plate; state: CurvaturePair; turn: number } {
-  if (kind.crystal === "100" && kind.axes === "110") return turnedState(load);
+interface MainState {
+  plate: Plate;
+  state: CurvaturePair;
+  turn: number;
+  readings: Readings;
+}
+
+function mainState(load: CurvaturePair, kind: PlateKind): MainState {
+  if (kind.crystal === "100" && kind.axes === "110") {
+    const turned = turnedState(load);
+    return { ...turned, ...readingsAtHighest(turned) };
+  }
   const plate = straightPlate(kind);
-  return { plate, state: reachedState(plate, load), turn: 0 };
+  const state = reachedState(plate, load);
+  return { plate, state, turn: 0, readings: readingsOf(plate, state) };
 }
 
 /** Bows of shapes that other loads could have led to, in the frame of a load with both parts zero or more. */
 function alternativeBows(load: CurvaturePair, kind: PlateKind, plate: Plate, reached: CurvaturePair): CurvaturePair[] {
   const found: CurvaturePair[] = [];
   const direction = kind.axes === "110" ? "hard" : "soft";
-  const keeps = (state: CurvaturePair, pull: number) => kind.crystal !== "100" || keepsDirection(direction, state, pull);
+  const keeps = (state: CurvaturePair, pull: number) =>
+    kind.crystal !== "100" || keepsDirection(direction, state, pull);
   const snapped = snappedState(plate, load, reached);
   if (snapped && keeps(snapped, load.halfDifference)) {
     const { bow } = readingsOf(plate, snapped);
@@ -102,7 +114,8 @@ function alternativeBows(load: CurvaturePair, kind: PlateKind, plate: Plate, rea
 
 /** Whether two shapes have the same bows, whichever axis is which. Upside down is another shape. */
 function sameShape(a: CurvaturePair, b: CurvaturePair): boolean {
-  const close = (x: number, y: number) => Math.abs(x - y) <= SAME_SHAPE * (Math.abs(b.mean) + Math.abs(b.halfDifference));
+  const close = (x: number, y: number) =>
+    Math.abs(x - y) <= SAME_SHAPE * (Math.abs(b.mean) + Math.abs(b.halfDifference));
   return close(a.mean, b.mean) && close(Math.abs(a.halfDifference), Math.abs(b.halfDifference));
 }
 

@@ -49,7 +49,8 @@ export function settleState(plate: PlateEnergy, load: CurvaturePair, start: Curv
   let before = 0;
   for (let step = 0; step < MOST_STEPS; step += 1) {
     const size = a + b;
-    if ((a0 < 0 && a < 1e-3 * size) || (b0 < 0 && b < 1e-3 * size)) return { mean: a, halfDifference: b, stable: false };
+    if ((a0 < 0 && a < 1e-3 * size) || (b0 < 0 && b < 1e-3 * size))
+      return { mean: a, halfDifference: b, stable: false };
     const slopeA = a * (1 + stretch.x) - a0;
     const slopeB = b * (tau + stretch.y) - tau * b0;
     const hAB = 2 * a * b * stretch.xy;

@@ -1,6 +1,7 @@
 import { reachedState } from "./load-path.ts";
 import { blendedEnergy, blendedPlate, siliconPlates, type Plate } from "./plate.ts";
-import { innerEnergy, settleState, type CurvaturePair, type RestingState } from "./stable-state.ts";
+import { settleState, type CurvaturePair, type RestingState } from "./stable-state.ts";
+import { turningCost } from "./turning-cost.ts";
 
 /** A shape of silicon (001) with the plate that stands for its direction. */
 export interface TurnedState {
@@ -26,8 +27,8 @@ export function turnedState(load: CurvaturePair): TurnedState {
   const { soft, hard } = siliconPlates();
   const straight = reachedState(hard, load);
   const pullAt = (shape: CurvaturePair) => hard.energy.tau * load.halfDifference * shape.halfDifference;
-  const costAt = (shape: CurvaturePair) => innerEnergy(hard.energy, shape) - innerEnergy(soft.energy, shape);
-  if (load.halfDifference > 0 && costAt(straight) <= pullAt(straight)) return { state: straight, plate: hard, turn: 0 };
+  if (load.halfDifference > 0 && turningCost(straight) <= pullAt(straight))
+    return { state: straight, plate: hard, turn: 0 };
   // Equal loads leave the direction to the crystal.
   if (load.halfDifference === 0) return { state: reachedState(soft, load), plate: soft, turn: Math.PI / 4 };
   let state = straight;
@@ -36,10 +37,10 @@ export function turnedState(load: CurvaturePair): TurnedState {
     const energy = blendedEnergy(sigma * sigma);
     const along = { mean: load.mean, halfDifference: (hard.energy.tau * load.halfDifference * sigma) / energy.tau };
     state = settleState(energy, along, state);
-    return sigma * costAt(state) - pullAt(state);
+    return sigma * turningCost(state) - pullAt(state);
   };
   let [low, high] = [0, 1];
-  let [atLow, atHigh] = [-pullAt(straight), costAt(straight) - pullAt(straight)];
+  let [atLow, atHigh] = [-pullAt(straight), turningCost(straight) - pullAt(straight)];
   let sigma = 1;
   for (let step = 0; step < MOST_STEPS && high - low > CLOSE; step += 1) {
     // The secant, and the middle whenever it hugs one end.
@@ -59,7 +60,7 @@ export function turnedState(load: CurvaturePair): TurnedState {
  */
 export function keepsDirection(direction: "soft" | "hard", shape: CurvaturePair, pull: number): boolean {
   const { soft, hard } = siliconPlates();
-  const cost = innerEnergy(hard.energy, shape) - innerEnergy(soft.energy, shape);
+  const cost = turningCost(shape);
   const { tau } = direction === "soft" ? soft.energy : hard.energy;
   const held = tau * pull * shape.halfDifference;
   return direction === "soft" ? cost + held > 0 : held - cost > 0;

@@ -11,7 +11,8 @@ function plateLines(i: PlateInput): WorkingLine[] {
 }
 
 const ANISOTROPY = "Silicon (100): bending and stretching by the crystal's constants; equal loads roll it about <100>.";
-const IN_FULL = "The figure is the plate solved in full; the formula is exact for small bows and within 0.3 % up to the onset.";
+const IN_FULL =
+  "The figure is the plate solved in full; the formula is exact for small bows and within 0.3 % up to the onset.";
 
 /** The bow of `freeWaferShape` along its major axis as data; the result has the sign of the curvature. */
 export function freeWaferShapeWorking(i: FreeWaferShapeInput): Working {
@@ -50,10 +51,27 @@ function stateLines(i: FreeWaferShapeInput): WorkingLine[] {
   const { average, softening, bow } = plateShapeOf(i);
   const major = Math.abs(bow.mean) + Math.abs(bow.halfDifference);
   return [
-    { symbol: "A", meaning: "mean of the curvatures averaged over the area, times R^2/(4h)", value: average.mean, unit: "1" },
+    {
+      symbol: "A",
+      meaning: "mean of the curvatures averaged over the area, times R^2/(4h)",
+      value: average.mean,
+      unit: "1",
+    },
     { symbol: "B", meaning: "half their difference, times R^2/(4h)", value: average.halfDifference, unit: "1" },
-    { symbol: "m", meaning: "share left of uniform curvature's resistance", value: softening, unit: "1", source: "plate-von-karman" },
-    { symbol: "K", meaning: "bow over twice the thickness, its size", value: major, unit: "1", source: "plate-von-karman" },
+    {
+      symbol: "m",
+      meaning: "share left of uniform curvature's resistance",
+      value: softening,
+      unit: "1",
+      source: "plate-von-karman",
+    },
+    {
+      symbol: "K",
+      meaning: "bow over twice the thickness, its size",
+      value: major,
+      unit: "1",
+      source: "plate-von-karman",
+    },
   ];
 }
 

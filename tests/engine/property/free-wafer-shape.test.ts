@@ -204,7 +204,10 @@ describe("freeWaferShape", () => {
         expect(["x", "y", "any"]).toContain(majorAxis);
         expect(result.warp).toBeGreaterThanOrEqual(0);
         expect(Math.abs(result.bowMajor)).toBeLessThanOrEqual(wafer.radius);
-        expect(Math.abs(result.bowMajor)).toBeGreaterThanOrEqual(Math.abs(result.bowMinor) * (1 - 1e-12));
+        // A closed roll is lower the tighter it is.
+        if (Math.abs(result.parabolaCurvatureMajor) * wafer.radius < Math.PI / 2) {
+          expect(Math.abs(result.bowMajor)).toBeGreaterThanOrEqual(Math.abs(result.bowMinor) * (1 - 1e-12));
+        }
         expect(result.warp).toBeGreaterThanOrEqual(Math.abs(result.bowMajor) * (1 - 1e-12));
         expect(Math.abs(result.majorAngle)).toBeLessThanOrEqual(Math.PI / 2);
       }),
@@ -238,7 +241,9 @@ describe("freeWaferShape", () => {
         const [here, next] = [at(share * 0.4 * mean), at(share * 0.4 * mean * (1 + 1e-9))];
         // Where it reaches <110> the angle goes as the square root of what is left.
         expect(Math.abs(here.turn - next.turn)).toBeLessThan(1e-3);
-        expect(relative(next.bow.mean + next.bow.halfDifference, here.bow.mean + here.bow.halfDifference)).toBeLessThan(1e-4);
+        expect(relative(next.bow.mean + next.bow.halfDifference, here.bow.mean + here.bow.halfDifference)).toBeLessThan(
+          1e-4,
+        );
         expect(here.turn).toBeGreaterThanOrEqual(0);
         expect(here.turn).toBeLessThanOrEqual(Math.PI / 4);
       }),

@@ -16,12 +16,7 @@ import { criticalFilmForce, criticalLinearCurvature } from "#app/engine/plate/cr
 import { freeWaferShape, type FreeWaferShape } from "#app/engine/plate/free-wafer-shape.ts";
 import { criticalLoad } from "#app/engine/plate/shape-model.ts";
 import { isotropicRatios, membraneStiffness, siliconRatios } from "#app/engine/plate/shear-ratios.ts";
-import {
-  bowlCurvature,
-  onsetCurvature,
-  onsetLoad,
-  rolledCurvatures,
-} from "#app/engine/plate/uniform-curvature.ts";
+import { bowlCurvature, onsetCurvature, onsetLoad, rolledCurvatures } from "#app/engine/plate/uniform-curvature.ts";
 import { siliconBiaxialModulus } from "#app/engine/silicon/biaxial-modulus.ts";
 import { relative } from "../relative.ts";
 
@@ -209,7 +204,8 @@ describe("rolled past the onset", () => {
     expect(result.regime).toBe("curled");
     expect(relative(result.bowMajor / h, bow)).toBeLessThan(near(CLAIMED.bow, bow));
     // Across the roll the figures are small and change sign: judged against the one along it, or their own size.
-    const across = (claim: number, along: number, own: number) => Math.max(claim * along, 0.003 * Math.abs(own)) + WRITTEN;
+    const across = (claim: number, along: number, own: number) =>
+      Math.max(claim * along, 0.003 * Math.abs(own)) + WRITTEN;
     expect(Math.abs(result.bowMinor / h - minor)).toBeLessThan(across(CLAIMED.bowAcross, bow, minor));
     expect(relative(result.centreCurvatureMajor / scale, centre)).toBeLessThan(near(CLAIMED.centre, centre));
     expect(relative(result.parabolaCurvatureMajor / scale, parabola)).toBeLessThan(near(CLAIMED.parabola, parabola));

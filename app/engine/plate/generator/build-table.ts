@@ -30,7 +30,8 @@ export function solveFamily(family: StateFamily, size: TableSize): SolvedFamily 
 
 /** Fits a table to solved families. */
 export function buildTable(families: readonly SolvedFamily[], size: TableSize): ShapeTable {
-  const rounded = (values: Float64Array, quantum: number) => Array.from(values, (value) => Math.round(value / quantum) + 0);
+  const rounded = (values: Float64Array, quantum: number) =>
+    Array.from(values, (value) => Math.round(value / quantum) + 0);
   return {
     generator: GENERATOR,
     energy: {

@@ -83,10 +83,12 @@ export interface OnsetErrors {
 }
 
 export function onsetErrors(degree: number): OnsetErrors {
-  const plates: { plate: Plate; ratios: ShearRatios }[] = [0, 0.07, 0.16, 0.22, 0.28, 0.35, 0.4, 0.45].map((poissonsRatio) => ({
-    plate: isotropicPlate(poissonsRatio),
-    ratios: isotropicRatios(poissonsRatio),
-  }));
+  const plates: { plate: Plate; ratios: ShearRatios }[] = [0, 0.07, 0.16, 0.22, 0.28, 0.35, 0.4, 0.45].map(
+    (poissonsRatio) => ({
+      plate: isotropicPlate(poissonsRatio),
+      ratios: isotropicRatios(poissonsRatio),
+    }),
+  );
   plates.push({ plate: siliconPlates().soft, ratios: siliconRatios() });
   const off = (sort: "bowl" | "saddle") =>
     Math.max(
@@ -104,7 +106,8 @@ export function errorsAt(point: OffGridPoint): Errors {
   const shape = plateShape({ mean: (load.x + load.y) / 2, halfDifference: (load.x - load.y) / 2 }, kind);
   if (point.class === "held") return { ...NONE, ...heldErrors(point, shape) };
   const swapped = Math.abs(point.bow.x) < Math.abs(point.bow.y);
-  const order = ({ x, y }: { x: number; y: number }): Along => (swapped ? { major: y, minor: x } : { major: x, minor: y });
+  const order = ({ x, y }: { x: number; y: number }): Along =>
+    swapped ? { major: y, minor: x } : { major: x, minor: y };
   const bow = apart(order(along(shape.bow)), order(point.bow));
   const centre = apart(order(along(shape.centre)), order(point.centre));
   const parabola = apart(order(along(shape.parabola)), order(point.parabola));

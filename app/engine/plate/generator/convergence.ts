@@ -46,7 +46,8 @@ export function criticalByBisection(degree: number, ratios: ShearRatios, sort: "
     const load = bowl ? { mean: size, halfDifference: 0 } : { mean: 0, halfDifference: size };
     const found = settle(plate, shape, loadVector(plate, load));
     // Past the onset the symmetric shape is a ridge.
-    if (found.stable && Math.abs(at(found.shape, bowl ? 1 : 0)) < 1e-9) [low, shape] = [size, Float64Array.from(found.shape)];
+    if (found.stable && Math.abs(at(found.shape, bowl ? 1 : 0)) < 1e-9)
+      [low, shape] = [size, Float64Array.from(found.shape)];
     else high = size;
   }
   return (low + high) / 2;

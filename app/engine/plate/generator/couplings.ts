@@ -72,8 +72,7 @@ export function couplings(
 function fillProduct(product: Float64Array, left: Profile, right: Profile, sign: -1 | 1, weights: Float64Array): void {
   const [a, b] = sign < 0 ? [right.a, right.b] : [right.b, right.a];
   for (let n = 0; n < product.length; n += 1) {
-    const value =
-      (at(left.h, n) * at(right.h, n)) / 2 - at(left.a, n) * at(a, n) - at(left.b, n) * at(b, n);
+    const value = (at(left.h, n) * at(right.h, n)) / 2 - at(left.a, n) * at(a, n) - at(left.b, n) * at(b, n);
     product[n] = value * at(weights, n);
   }
 }

@@ -21,7 +21,12 @@ export interface MeasureFit {
 const place: TablePlace = { s: 1, x: 1, y: 0, yq: 0, ys: 0, yss: 0, ysq: 0 };
 
 /** Values of all products at a place, and their derivatives by x and y when asked for. */
-function products(extent: Extent, x: number, y: number, z: number): { f: Float64Array; fx: Float64Array; fy: Float64Array } {
+function products(
+  extent: Extent,
+  x: number,
+  y: number,
+  z: number,
+): { f: Float64Array; fx: Float64Array; fy: Float64Array } {
   const [px, py] = [slopes(extent[0], x), slopes(extent[1], y)];
   const pz = polynomials(extent[2], z);
   const count = termCount(extent);
@@ -78,7 +83,9 @@ export function fitEnergy(extent: Extent, families: readonly SolvedFamily[]): Fl
       // e by R at one P and by P at one R, as in plate-energy.ts.
       const byR = f.map(
         (value, n) =>
-          half * product * ((3 * s * s * value + s ** 3 * (2 * at(fx, n) + at(fy, n) * ys)) * (-(s ** 5) / 12) -
+          half *
+          product *
+          ((3 * s * s * value + s ** 3 * (2 * at(fx, n) + at(fy, n) * ys)) * (-(s ** 5) / 12) -
             (s ** 3 * at(fy, n) * yq * state.q) / squares),
       );
       const byP = f.map((value, n) => half * s ** 3 * (2 * value + (product * at(fy, n) * yq) / squares));
@@ -110,7 +117,11 @@ export function fitMeasure(extent: Extent, families: readonly SolvedFamily[], fi
       const { f } = products(extent, place.x, place.y, state.z);
       const perUnit = product / (1 + squares / 3);
       const size = state.mean + state.halfDifference;
-      gathered.add(f, (fit.of(state) / uniform - 1) / perUnit, weightOf(family, state) * (Math.abs((uniform * perUnit) / size) + 1e-4));
+      gathered.add(
+        f,
+        (fit.of(state) / uniform - 1) / perUnit,
+        weightOf(family, state) * (Math.abs((uniform * perUnit) / size) + 1e-4),
+      );
     }
     const end: EndlessRoll = endlessRoll(family.ratios, family.lambda);
     addEnd(extent, family, end[fit.part], gathered.add);

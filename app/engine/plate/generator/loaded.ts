@@ -1,6 +1,6 @@
 import { at } from "../table/elements.ts";
 import { loadVector, settle, type Equilibrium, type MeanCurvature } from "./equilibrium.ts";
-import { measurer, type Measurer, type Measures } from "./measures.ts";
+import { heightOf, measurer, type Measurer, type Measures } from "./measures.ts";
 import { ritzPlate, type RitzPlate, type RitzSpace } from "./ritz-plate.ts";
 import { sideSpace, stableAside, type SideSpace } from "./side-stability.ts";
 import type { ShearRatios } from "../shear-ratios.ts";
@@ -15,9 +15,9 @@ export interface LoadSolver {
 /** A shape under a load. */
 export interface LoadedShape {
   shape: Float64Array;
-  /** Along the principal axes of the average curvature. */
+  /** Along the axis on which the rim is highest, and across it. */
   measures: Measures;
-  /** Angle from the load's x axis to the nearer of them, rad. */
+  /** Angle from the load's x axis to it, rad. */
   turn: number;
   /** Area means of the curvatures, times R²/(4h). */
   average: Required<MeanCurvature>;
@@ -66,7 +66,12 @@ export function reach(solver: LoadSolver, load: MeanCurvature): LoadedShape {
  * The shape that stays when one part of a load that leads to it is turned round step by step; null when it lets go on the way.
  * With the mean turned round it is a roll that has not snapped back; with the half difference, one about the other axis.
  */
-export function heldShape(solver: LoadSolver, load: MeanCurvature, turned: "mean" | "halfDifference", steps: number): LoadedShape | null {
+export function heldShape(
+  solver: LoadSolver,
+  load: MeanCurvature,
+  turned: "mean" | "halfDifference",
+  steps: number,
+): LoadedShape | null {
   let shape = reach(solver, { ...load, [turned]: -load[turned] }).shape;
   let last: Equilibrium | null = null;
   for (let n = 1; n <= steps; n += 1) {
@@ -81,8 +86,7 @@ export function heldShape(solver: LoadSolver, load: MeanCurvature, turned: "mean
 function described(solver: LoadSolver, { shape, stable }: Equilibrium): LoadedShape {
   const { plate, measure, sides } = solver;
   const [half, twist] = [at(shape, 1) / 2, plate.space.uniform > 2 ? at(shape, 2) / 2 : 0];
-  // Along the principal axes of the average curvature, x being the one nearest to the load's.
-  const turn = twist === 0 ? 0 : Math.atan(twist / half) / 2;
+  const turn = plate.space.uniform > 2 ? highestAt(plate.space, shape) : 0;
   return {
     shape,
     measures: measure(shape, turn),
@@ -90,6 +94,21 @@ function described(solver: LoadSolver, { shape, stable }: Equilibrium): LoadedSh
     average: { mean: at(shape, 0) / 2, halfDifference: half, twist },
     stable: stable && sides.every((side) => stableAside(plate, side, shape)),
   };
+}
+
+/** Angle of the highest point of the rim within a quarter turn about the load's x axis, by thirds from the best of a few. */
+function highestAt({ functions }: RitzSpace, shape: Float64Array): number {
+  const height = (angle: number) => functions.reduce((sum, one, n) => sum + at(shape, n) * heightOf(one, 1, angle), 0);
+  const step = Math.PI / 64;
+  let best = 0;
+  for (let n = -16; n <= 16; n += 1) if (height(n * step) > height(best)) best = n * step;
+  let [low, high] = [best - step, best + step];
+  while (high - low > 1e-9) {
+    const third = (high - low) / 3;
+    if (height(low + third) < height(high - third)) low += third;
+    else high -= third;
+  }
+  return (low + high) / 2;
 }
 
 function scaled({ mean, halfDifference, twist = 0 }: MeanCurvature, by: number): Required<MeanCurvature> {

@@ -106,9 +106,7 @@ function gridOf({ functions }: RitzSpace): Float64Array[] {
     const centre = functions.map(({ order, jet }) => (order === 0 ? jet(0)[0] / 2 : 0));
     for (let spoke = 0; spoke < SPOKES; spoke += 1) {
       const angle = (spoke * Math.PI) / SPOKES;
-      lines.push(
-        Float64Array.from(functions, (one, n) => (radial[n] ?? 0) * around(one, angle) - (centre[n] ?? 0)),
-      );
+      lines.push(Float64Array.from(functions, (one, n) => (radial[n] ?? 0) * around(one, angle) - (centre[n] ?? 0)));
     }
   }
   return lines;

@@ -1,5 +1,6 @@
 import { isotropicRatios, membraneStiffness, siliconRatios, type ShearRatios } from "../shear-ratios.ts";
 import type { PlateKind } from "../shape-model.ts";
+import type { Keep } from "./keep.ts";
 import { heldShape, loadSolver, reach, type LoadedShape } from "./loaded.ts";
 import { seededRandom } from "./random.ts";
 import { ritzSpace, type RitzSpace } from "./ritz-plate.ts";
@@ -62,14 +63,18 @@ function loadOf(kind: PlateKind, times: number, ratio: number): { x: number; y: 
   return { x: mean + half, y: mean - half };
 }
 
-function ratiosOf({ crystal, axes, poissonsRatio }: PlateKind): ShearRatios {
+export function ratiosOf({ crystal, axes, poissonsRatio }: PlateKind): ShearRatios {
   if (crystal !== "100") return isotropicRatios(poissonsRatio);
   const { along, between } = siliconRatios();
   return axes === "110" ? { along: between, between: along } : { along, between };
 }
 
 /** Solves the points of a plan, the same ones every time. `progress` is told of each. */
-export function offGridPoints(plan: OffGridPlan, progress: (done: number, total: number) => void): OffGridPoint[] {
+export function offGridPoints(
+  plan: OffGridPlan,
+  keep: Keep,
+  progress: (done: number, total: number) => void,
+): OffGridPoint[] {
   const random = seededRandom(20);
   const even = ritzSpace("even", plan.degree);
   const wide = plan.beyond > 0 ? ritzSpace("even", plan.beyondDegree) : even;
@@ -77,7 +82,9 @@ export function offGridPoints(plan: OffGridPlan, progress: (done: number, total:
   const total = plan.isotropic + plan.silicon + plan.turned + plan.beyond;
   const found: OffGridPoint[] = [];
   const solve = (space: RitzSpace, kind: PlateKind, sort: PointClass | null, times: number, ratio: number) => {
-    found.push(...solvedPoints(space, kind, sort, loadOf(kind, times, ratio)));
+    const load = loadOf(kind, times, ratio);
+    const name = `point ${JSON.stringify([space.degree, kind, load])}`;
+    found.push(...keep(name, () => solvedPoints(space, kind, sort, load)));
   };
   for (let n = 0; n < total; n += 1) {
     const [a, b, c] = [random(), random(), random()];
@@ -86,7 +93,8 @@ export function offGridPoints(plan: OffGridPlan, progress: (done: number, total:
     const times = n % 3 === 0 ? 0.6 + 1.4 * a : HIGHEST_LOAD * a * a;
     const ratio = n % 4 === 0 ? 1 : n % 6 === 1 ? 0.5 * b * b - 1 : 2 * b - 1;
     if (n < plan.isotropic) solve(even, { poissonsRatio }, null, times, ratio);
-    else if (n < plan.isotropic + plan.silicon) solve(even, { poissonsRatio: 0.28, crystal: "100" }, null, times, ratio);
+    else if (n < plan.isotropic + plan.silicon)
+      solve(even, { poissonsRatio: 0.28, crystal: "100" }, null, times, ratio);
     else if (n < total - plan.beyond) {
       // Nearly equal moments too, where the roll lies between the axes.
       const near = n % 2 === 0 ? 1 - 0.3 * b : 2 * b - 1;
@@ -97,7 +105,12 @@ export function offGridPoints(plan: OffGridPlan, progress: (done: number, total:
   return found;
 }
 
-function solvedPoints(space: RitzSpace, kind: PlateKind, sort: PointClass | null, load: { x: number; y: number }): OffGridPoint[] {
+export function solvedPoints(
+  space: RitzSpace,
+  kind: PlateKind,
+  sort: PointClass | null,
+  load: { x: number; y: number },
+): OffGridPoint[] {
   const solver = loadSolver(space, ratiosOf(kind));
   const pair = { mean: (load.x + load.y) / 2, halfDifference: (load.x - load.y) / 2 };
   const shape = reach(solver, pair);

@@ -7,7 +7,8 @@ export function gaussLegendre(count: number): { nodes: Float64Array; weights: Fl
     let slope = 1;
     for (let step = 0; step < 100; step += 1) {
       let [previous, value] = [1, x];
-      for (let k = 2; k <= count; k += 1) [previous, value] = [value, ((2 * k - 1) * x * value - (k - 1) * previous) / k];
+      for (let k = 2; k <= count; k += 1)
+        [previous, value] = [value, ((2 * k - 1) * x * value - (k - 1) * previous) / k];
       slope = (count * (x * value - previous)) / (x * x - 1);
       const change = value / slope;
       x -= change;

@@ -24,9 +24,7 @@ function literal(table: ShapeTable, indent: string): string {
   const inner = `${indent}  `;
   const head = (one: { extent: readonly number[]; quantum: number }) =>
     `${inner}  extent: [${one.extent.join(", ")}],\n${inner}  quantum: ${one.quantum},\n`;
-  const lists = measures.values.map(
-    (values) => `${inner}    [\n${filled(values, `${inner}      `)}\n${inner}    ],\n`,
-  );
+  const lists = measures.values.map((values) => `${inner}    [\n${filled(values, `${inner}      `)}\n${inner}    ],\n`);
   return [
     `{\n${inner}generator: ${table.generator},\n`,
     `${inner}energy: {\n${head(energy)}${inner}  values: [\n${filled(energy.values, `${inner}    `)}\n${inner}  ],\n${inner}},\n`,
@@ -38,7 +36,11 @@ function literal(table: ShapeTable, indent: string): string {
 /** Source text of a file that holds one table, or several by name. */
 export function tableText(name: string, about: string, tables: ShapeTable | Record<string, ShapeTable>): string {
   const several = !("generator" in tables);
-  const type = several ? `{ ${Object.keys(tables).map((key) => `${key}: ShapeTable`).join("; ")} }` : "ShapeTable";
+  const type = several
+    ? `{ ${Object.keys(tables)
+        .map((key) => `${key}: ShapeTable`)
+        .join("; ")} }`
+    : "ShapeTable";
   const body = several
     ? `{\n${Object.entries(tables as Record<string, ShapeTable>)
         .map(([key, table]) => `  ${key}: ${literal(table, "  ")},\n`)
