@@ -30,7 +30,7 @@ export function readingsAtHighest({ state, turn }: Pick<TurnedState, "state" | "
     if (2 * uplift * Math.sin(4 * (turn + angle)) > spread * Math.sin(2 * angle)) low = angle;
     else high = angle;
   }
-  const aside = (low + high) / 2;
+  const aside = uplift > 0 ? low : high;
   const share = hardShare(turn + aside);
   const across = Math.cos(2 * aside);
   const pair = (of: (readings: Readings) => CurvaturePair): CurvaturePair => ({

@@ -52,18 +52,23 @@ export function plateShape(load: CurvaturePair, kind: PlateKind): PlateShape {
   const straight = straightPlate(kind);
   const bows = alternativeBows(size, kind, straight, state).filter((bow) => !sameShape(bow, readings.bow));
   const turned = turn === 0 ? 0 : turn * sign(load.halfDifference);
+  // A saddle of no mean may snap either way: up along x.
+  const signs = {
+    mean: sign(load.mean === 0 ? load.halfDifference : load.mean),
+    halfDifference: sign(load.halfDifference),
+  };
   return {
-    bow: signed(readings.bow, load),
-    centre: signed(readings.centre, load),
-    parabola: signed(readings.parabola, load),
-    rim: readings.rim * sign(load.mean),
-    average: signed(state, load),
+    bow: signed(readings.bow, signs),
+    centre: signed(readings.centre, signs),
+    parabola: signed(readings.parabola, signs),
+    rim: readings.rim * signs.mean,
+    average: signed(state, signs),
     softening: softening(plate.energy, state),
     dip: dipAcross(alongY(readings.bow), alongY(readings.centre), alongY(readings.parabola)),
     top: rimTop(readings),
     turn: turned,
     loadRatio: Math.max(size.mean / criticalLoad(kind), size.halfDifference / straight.saddleLoad),
-    others: bows.map((bow) => signed(bow, load)),
+    others: bows.map((bow) => signed(bow, signs)),
   };
 }
 
@@ -123,8 +128,8 @@ function sign(value: number): 1 | -1 {
   return value < 0 ? -1 : 1;
 }
 
-function signed({ mean, halfDifference }: CurvaturePair, load: CurvaturePair): CurvaturePair {
-  return { mean: mean * sign(load.mean), halfDifference: halfDifference * sign(load.halfDifference) };
+function signed({ mean, halfDifference }: CurvaturePair, signs: CurvaturePair): CurvaturePair {
+  return { mean: mean * signs.mean, halfDifference: halfDifference * signs.halfDifference };
 }
 
 function alongY({ mean, halfDifference }: CurvaturePair): number {

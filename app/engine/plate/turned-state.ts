@@ -13,7 +13,11 @@ export interface TurnedState {
 
 /** How near to a direction the search for it ends. */
 const CLOSE = 1e-9;
+/** Slope of the energy at which it ends too, over the cost of the whole turn. */
+const SETTLED = 1e-11;
 const MOST_STEPS = 40;
+/** Half difference over mean of curvatures that are the same but for what a search leaves over. */
+const ALIKE = 1e-6;
 
 /**
  * Shape of silicon (001) whose load has its axes along <110>, both parts zero or more. The load pulls the roll towards <110> and
@@ -27,30 +31,37 @@ export function turnedState(load: CurvaturePair): TurnedState {
   const { soft, hard } = siliconPlates();
   const straight = reachedState(hard, load);
   const pullAt = (shape: CurvaturePair) => hard.energy.tau * load.halfDifference * shape.halfDifference;
-  if (load.halfDifference > 0 && turningCost(straight) <= pullAt(straight))
-    return { state: straight, plate: hard, turn: 0 };
   // Equal loads leave the direction to the crystal.
   if (load.halfDifference === 0) return { state: reachedState(soft, load), plate: soft, turn: Math.PI / 4 };
-  let state = straight;
+  const rolls = load.mean > soft.criticalLoad;
+  const roll = rolls ? reachedState(soft, { mean: load.mean, halfDifference: 0 }) : straight;
+  // Past the onset a bowl gives way, but curvatures that hardly differ are too little for their energies to tell.
+  const givesWay = (shape: CurvaturePair) => rolls && shape.halfDifference < ALIKE * shape.mean;
+  if (!givesWay(straight) && turningCost(straight) <= pullAt(straight))
+    return { state: straight, plate: hard, turn: 0 };
+  const scale = turningCost(roll);
+  let state = roll;
   /** Slope of the energy by σ, over 2; from below zero at σ = 0 to above it at σ = 1. */
   const slopeAt = (sigma: number): number => {
     const energy = blendedEnergy(sigma * sigma);
     const along = { mean: load.mean, halfDifference: (hard.energy.tau * load.halfDifference * sigma) / energy.tau };
-    state = settleState(energy, along, state);
+    state = settleState(energy, along, givesWay(state) ? roll : state);
+    if (givesWay(state)) return scale;
     return sigma * turningCost(state) - pullAt(state);
   };
   let [low, high] = [0, 1];
-  let [atLow, atHigh] = [-pullAt(straight), turningCost(straight) - pullAt(straight)];
+  let [atLow, atHigh] = [-pullAt(straight), givesWay(straight) ? scale : turningCost(straight) - pullAt(straight)];
   let sigma = 1;
   for (let step = 0; step < MOST_STEPS && high - low > CLOSE; step += 1) {
     // The secant, and the middle whenever it hugs one end.
     const secant = (low * atHigh - high * atLow) / (atHigh - atLow);
     sigma = step % 3 === 2 ? (low + high) / 2 : secant;
     const slope = slopeAt(sigma);
-    if (Math.abs(slope) < 1e-13 * (1 + Math.abs(atHigh))) break;
+    if (Math.abs(slope) < SETTLED * scale) break;
     if (slope < 0) [low, atLow] = [sigma, slope];
     else [high, atHigh] = [sigma, slope];
   }
+  if (givesWay(state)) return { state: roll, plate: soft, turn: Math.PI / 4 };
   return { state, plate: blendedPlate(sigma * sigma), turn: Math.PI / 4 - Math.asin(Math.min(1, sigma)) / 2 };
 }
 

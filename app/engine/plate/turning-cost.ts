@@ -7,6 +7,9 @@ import { evaluateAll, sideBySide, type PlaneSums } from "./table/plane-sum.ts";
 const place: TablePlace = { s: 1, x: 1, y: 0, yq: 0, ys: 0, yss: 0, ysq: 0 };
 const value = new Float64Array(1);
 
+/** Half difference over mean of the curvatures below which a shape counts as a bowl. */
+const NEAR_BOWL = 1e-4;
+
 let apart: PlaneSums | null = null;
 
 /** Energy factor of the hard axes less that of the soft ones. */
@@ -25,6 +28,9 @@ function difference(): PlaneSums {
  * their errors, which are taken off at every A² + B², fading as the square of q because there are no bowls among long rolls.
  */
 export function turningCost({ mean, halfDifference }: CurvaturePair): number {
+  // It goes as B² while B is small, where the difference of two energies would be nothing but their rounding.
+  const least = NEAR_BOWL * mean;
+  if (halfDifference < least) return turningCost({ mean, halfDifference: least }) * (halfDifference / least) ** 2;
   const [soft, hard] = [siliconPlates().soft.energy, siliconPlates().hard.energy];
   const squares = mean * mean + halfDifference * halfDifference;
   const product = (mean - halfDifference) * (mean + halfDifference);

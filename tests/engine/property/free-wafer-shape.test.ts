@@ -30,6 +30,8 @@ const wafers = fc.record({
   axes: fc.constantFrom(undefined, "100" as const, "110" as const),
 });
 
+fc.configureGlobal({ ...fc.readConfigureGlobal(), seed: 20 });
+
 describe("energy", () => {
   const loads = fc.record({ mean: between(0, 40), halfDifference: between(0, 40) });
   const plates = fc.oneof(
