@@ -72,9 +72,10 @@ const LINEAR_WITHIN = 0.01;
  *
  * From von Karman's plate solved in full and tabulated. Errors against several hundred solutions with a finer basis at random
  * loads (`table/errors.ts`), up to 20 times the critical load and 20 times beyond that, ν from 0 to 0.45 and silicon (100):
- * - bow along the axis that bends most 0.1 %, of a second shape 0.15 %; critical load 0.05 %, that of a saddle's snap 0.3 %,
- * - bow across it 0.4 % of its own value or of a tenth of the one along it, whichever is more,
- * - centre curvature 0.3 % along and, as across is measured, 1.3 % across; parabola 0.1 % and 0.4 %,
+ * - bow along the axis that bends most 0.1 %, 0.2 % on silicon (100) under unequal loads along <110>, where the angle of a roll
+ *   between the axes is within 0.02 rad; of a second shape 0.15 %; critical load 0.05 %, that of a saddle's snap 0.3 %,
+ * - bow across it 0.5 % of its own value or of a tenth of the one along it, whichever is more,
+ * - centre curvature 0.3 % along and, as across is measured, 1.3 % across; parabola as the bow,
  * - three-point bow 0.1 % of the bow along the axis, averaged over where the points lie; where they do adds up to 0.25 % for a roll,
  * - warp of the whole surface 0.2 %.
  * Beyond 400 times the critical load the tables go over into the exact limit of a long roll, and the error shrinks. A Poisson's

@@ -31,7 +31,7 @@ function shape(poissonsRatio: number, S: number | { x: number; y: number }, crys
 }
 
 /** What `freeWaferShape` claims: along the axis that bends most, and across it as a share of the value along it. */
-const CLAIMED = { bow: 0.002, parabola: 0.002, centre: 0.005, warp: 0.002, bowAcross: 3e-4, curvatureAcross: 1.5e-3 };
+const CLAIMED = { bow: 0.001, parabola: 0.001, centre: 0.003, warp: 0.002, bowAcross: 3e-4, curvatureAcross: 1.5e-3 };
 /** Half a unit of the fourth decimal. */
 const WRITTEN = 5e-5;
 

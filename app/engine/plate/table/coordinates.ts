@@ -71,5 +71,6 @@ export function locate(squares: number, q: number, rate: number, place: TablePla
   place.yq = 2 / width;
   place.ys = -middle - y * slope;
   place.ysq = (-2 * slope) / width;
-  place.yss = -(highSS + lowSS) / width + middle * slope - place.ys * slope - y * ((highSS - lowSS) / width - slope * slope);
+  place.yss =
+    -(highSS + lowSS) / width + middle * slope - place.ys * slope - y * ((highSS - lowSS) / width - slope * slope);
 }

@@ -81,7 +81,12 @@ export function sideBySide(sums: readonly PlaneSum[]): PlaneSums {
 }
 
 /** Values of all sums at one place, into `values`. */
-export function evaluateAll({ starts, count, coefficients }: PlaneSums, x: number, y: number, values: Float64Array): void {
+export function evaluateAll(
+  { starts, count, coefficients }: PlaneSums,
+  x: number,
+  y: number,
+  values: Float64Array,
+): void {
   fill(indexAt(starts, 1), y);
   values.fill(0);
   let [t, before] = [1, x];
