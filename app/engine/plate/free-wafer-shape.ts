@@ -75,7 +75,7 @@ const LINEAR_WITHIN = 0.01;
  * - bow along the axis that bends most 0.1 %, 0.2 % on silicon (100) under unequal loads along <110>, where the angle of a roll
  *   between the axes is within 0.02 rad; of a second shape 0.15 %; critical load 0.05 %, that of a saddle's snap 0.3 %,
  * - bow across it 0.5 % of its own value or of a tenth of the one along it, whichever is more,
- * - centre curvature 0.3 % along and, as across is measured, 1.3 % across; parabola as the bow,
+ * - centre curvature 0.3 % along and, as across is measured, 1.3 % across; parabola 0.15 % and 0.5 %,
  * - three-point bow 0.1 % of the bow along the axis, averaged over where the points lie; where they do adds up to 0.25 % for a roll,
  * - warp of the whole surface 0.2 %.
  * Beyond 400 times the critical load the tables go over into the exact limit of a long roll, and the error shrinks. A Poisson's

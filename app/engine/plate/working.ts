@@ -13,13 +13,15 @@ function plateLines(i: PlateInput): WorkingLine[] {
 const ANISOTROPY = "Silicon (100): bending and stretching by the crystal's constants; equal loads roll it about <100>.";
 const IN_FULL =
   "The figure is the plate solved in full; the formula is exact for small bows and within 0.3 % up to the onset.";
+const CRYSTAL_IN_FULL =
+  "Silicon (100): the figure is the plate solved in full with the crystal's constants; the formula with ν = 0.28 is within 0.7 % up to the onset.";
 
 /** The bow of `freeWaferShape` along its major axis as data; the result has the sign of the curvature. */
 export function freeWaferShapeWorking(i: FreeWaferShapeInput): Working {
   const shape = freeWaferShape(i);
   const { x, y } =
     typeof i.linearCurvature === "number" ? { x: i.linearCurvature, y: i.linearCurvature } : i.linearCurvature;
-  const bowl = shape.regime !== "curled" && x === y && i.crystal !== "100";
+  const bowl = shape.regime !== "curled" && x === y;
   const curvatures: WorkingLine[] =
     x === y
       ? [{ symbol: "κ_lin", meaning: "curvature by small-deflection theory", value: x, unit: "1/m" }]
@@ -41,9 +43,14 @@ export function freeWaferShapeWorking(i: FreeWaferShapeInput): Working {
       value: shape.bowMajor,
       unit: "m",
     },
-    note: i.crystal === "100" ? ANISOTROPY : bowl ? IN_FULL : undefined,
+    note: shapeNote(bowl, i.crystal === "100"),
     from: [criticalCurvatureWorking(i)],
   };
+}
+
+function shapeNote(bowl: boolean, crystal: boolean): string | undefined {
+  if (bowl) return crystal ? CRYSTAL_IN_FULL : IN_FULL;
+  return crystal ? ANISOTROPY : undefined;
 }
 
 /** The state behind a shape: what the table was asked for and gave. */

@@ -31,7 +31,7 @@ function shape(poissonsRatio: number, S: number | { x: number; y: number }, crys
 }
 
 /** What `freeWaferShape` claims: along the axis that bends most, and across it as a share of the value along it. */
-const CLAIMED = { bow: 0.001, parabola: 0.001, centre: 0.003, warp: 0.002, bowAcross: 3e-4, curvatureAcross: 1.5e-3 };
+const CLAIMED = { bow: 0.001, parabola: 0.0015, centre: 0.003, warp: 0.002, bowAcross: 3e-4, curvatureAcross: 1.5e-3 };
 /** Half a unit of the fourth decimal. */
 const WRITTEN = 5e-5;
 
@@ -195,6 +195,27 @@ const rolled = {
     [25.38596, 68.2471, 0.1839, 34.8452, -0.0051, 34.1797, -0.0214, 68.3116],
   ],
 } as const;
+
+describe("the bowl formula of the working, K (1 + (1 − ν) (17 + 5ν)/12 K²) = S", () => {
+  const formula = (S: number, nu: number) => {
+    // The positive root of K + a K³ = S.
+    const a = ((1 - nu) * (17 + 5 * nu)) / 12;
+    const stretch = Math.sqrt(3 * a);
+    return (2 / stretch) * Math.sinh(Math.asinh(1.5 * S * stretch) / 3);
+  };
+  const worst = (nu: number, crystal?: "100") => {
+    const onset = criticalLoad({ poissonsRatio: nu, crystal });
+    const errors = [0.1, 0.2, 0.3, 0.4, 0.5, 0.6, 0.7, 0.8, 0.9, 0.999].map((share) =>
+      relative(2 * formula(share * onset, nu), shape(nu, share * onset, crystal).bowMajor / h),
+    );
+    return Math.max(...errors);
+  };
+
+  it("is within 0.3 % of the full solution for usual ν, 0.7 % for silicon (100)", () => {
+    for (const nu of [0.17, 0.22, 0.28, 0.35]) expect(worst(nu)).toBeLessThan(0.003);
+    expect(worst(0.28, "100")).toBeLessThan(0.007);
+  });
+});
 
 describe("rolled past the onset", () => {
   const rows = Object.entries(rolled).flatMap(([nu, cases]) => cases.map((row) => [Number(nu), ...row] as const));

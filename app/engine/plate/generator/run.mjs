@@ -1,6 +1,6 @@
 /**
  * `npm run plate-table`: solves the free plate in full, fits the tables of the engine to it, solves several hundred shapes
- * between the tables' points with a finer basis, prints the errors and stores both. About ten minutes on one core; what is solved
+ * between the tables' points with a finer basis, prints the errors and stores both. A quarter of an hour on one core; what is solved
  * is kept under node_modules/.cache, from where a run that was cut short goes on. Raise GENERATOR after a change of the solver.
  * The files that it writes are part of the project; nothing of the engine imports the generator.
  */
