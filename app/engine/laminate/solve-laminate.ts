@@ -1,6 +1,15 @@
 import { EngineInputError } from "../errors.ts";
 import { freeStrain, type NamedLayer } from "./free-strain.ts";
 import { checkLayer, ROOM_TEMPERATURE, type Layer } from "./layer.ts";
+import {
+  bendingStiffnessOf,
+  LAMINATE_SUMS,
+  laminateSums,
+  meanStrainOf,
+  neutralPlaneOf,
+  strainPerHeightOf,
+  stretchingOf,
+} from "./laminate-sums.ts";
 
 export interface LaminateResult {
   /** 1/m, positive when the top face (device side) is concave. */
@@ -38,19 +47,7 @@ export interface LaminateResult {
 export function solveLaminate(layersBottomToTop: readonly Layer[], o: { temperature?: number } = {}): LaminateResult {
   const temperature = o.temperature ?? ROOM_TEMPERATURE;
   const layers = place(layersBottomToTop, temperature);
-  const stretching = sum(layers, (l) => l.stiffness);
-  if (!(stretching > 0)) {
-    throw new EngineInputError("layers", "no layer covers any area, so the stack has no stiffness");
-  }
-  const neutralPlane = sum(layers, (l) => l.stiffness * l.centre) / stretching;
-  const meanStrain = sum(layers, (l) => l.stiffness * l.freeStrain) / stretching;
-  // Taken about the neutral plane and against the mean strain, so that nothing large cancels for a thin film on a wafer.
-  const bendingStiffness = sum(
-    layers,
-    (l) => l.stiffness * ((l.thickness * l.thickness) / 12 + (l.centre - neutralPlane) ** 2),
-  );
-  const moment = sum(layers, (l) => l.stiffness * (l.freeStrain - meanStrain) * (l.centre - neutralPlane));
-  const strainPerHeight = moment / bendingStiffness;
+  const { stretching, neutralPlane, meanStrain, bendingStiffness, strainPerHeight } = bend(layers);
   const stressAt = (l: PlacedLayer, z: number) =>
     l.biaxialModulus * (meanStrain - l.freeStrain + strainPerHeight * (z - neutralPlane));
   return {
@@ -66,11 +63,41 @@ export function solveLaminate(layersBottomToTop: readonly Layer[], o: { temperat
   };
 }
 
+/**
+ * Sums through the stack taken twice: about the mid-plane to find the neutral plane and the mean strain, then about those, so
+ * that nothing large cancels for a thin film on a wafer.
+ */
+function bend(layers: readonly PlacedLayer[]) {
+  const thickness = Float64Array.from(layers, (l) => l.thickness);
+  const modulus = Float64Array.from(layers, (l) => l.coveredModulus);
+  const bottom = -sum(layers, (l) => l.thickness) / 2;
+  const sums = new Float64Array(LAMINATE_SUMS);
+  const sumAbout = (plane: number, strain: number) => {
+    const pressure = Float64Array.from(layers, (l) => l.coveredModulus * (l.freeStrain - strain));
+    laminateSums(layers.length, thickness, 0, modulus, pressure, bottom - plane, sums);
+  };
+  sumAbout(0, 0);
+  const stretching = stretchingOf(sums);
+  if (!(stretching > 0)) {
+    throw new EngineInputError("layers", "no layer covers any area, so the stack has no stiffness");
+  }
+  const neutralPlane = neutralPlaneOf(sums);
+  const meanStrain = meanStrainOf(sums);
+  sumAbout(neutralPlane, meanStrain);
+  return {
+    stretching,
+    neutralPlane,
+    meanStrain,
+    bendingStiffness: bendingStiffnessOf(sums),
+    strainPerHeight: strainPerHeightOf(sums),
+  };
+}
+
 interface PlacedLayer {
   thickness: number;
   biaxialModulus: number;
-  /** Biaxial modulus times thickness times coverage, N/m. */
-  stiffness: number;
+  /** Biaxial modulus times area fraction, Pa. */
+  coveredModulus: number;
   /** Height of the layer's middle over the mid-plane of the stack, m. */
   centre: number;
   freeStrain: number;
@@ -91,7 +118,7 @@ function place(layersBottomToTop: readonly Layer[], temperature: number): Placed
     return {
       thickness,
       biaxialModulus,
-      stiffness: biaxialModulus * thickness * coverage,
+      coveredModulus: biaxialModulus * coverage,
       centre,
       freeStrain: freeStrain(entry, base, temperature),
     };
