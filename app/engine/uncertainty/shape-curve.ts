@@ -31,7 +31,7 @@ export function shapeCurve(disc: Omit<PlateInput, "thickness">): ShapeCurve {
   const at = (load: number) => freeWaferShape({ ...thin, linearCurvature: load * scale });
   const nodes = Array.from({ length: BEFORE + BEYOND + 1 }, (_, n) => at(loadAt(n) * onset));
   const major = Float64Array.from(nodes, ({ bowMajor }) => (2 * bowMajor) / scale);
-  const minor = Float64Array.from(nodes, ({ bowMinor }) => (2 * bowMinor) / scale);
+  const high = Float64Array.from(nodes, ({ warp }) => (2 * warp) / scale);
   const along = (curve: Float64Array, position: number) => {
     const n = Math.floor(position);
     const below = curve[n] ?? 0;
@@ -51,9 +51,9 @@ export function shapeCurve(disc: Omit<PlateInput, "thickness">): ShapeCurve {
       const perLoad = (4 * thickness) / (radius * radius);
       const position = positionOf(Math.abs(curvature) / (perLoad * onset));
       if (!(position < BEFORE + BEYOND)) return asked(curvature, thickness).warp;
-      const high = arcSagitta(along(major, position) * perLoad, radius);
-      const low = arcSagitta(along(minor, position) * perLoad, radius);
-      return Math.max(high, low, 0) - Math.min(high, low, 0);
+      const bow = along(major, position);
+      // What lies beside the arc shrinks with it, as in `freeWaferShape`.
+      return bow > 0 ? (arcSagitta(bow * perLoad, radius) * along(high, position)) / bow : 0;
     },
   };
 }

@@ -1,8 +1,9 @@
 /*
- * Shape of a free circular plate under uniform moments. The reference numbers are our own full solutions: von Karman's energy
- * minimised in polynomials of degree 12 to 24 (even in both axes), membrane forces in the same degree, converged to 1 part in
- * 10 000; the axisymmetric ones agree with an independent solution by nonlinear finite elements to 1 part in 1000. No printed
- * values. The engine's formulas approximate them, so each tolerance is what `freeWaferShape` claims.
+ * Shape of a free circular plate under uniform moments. The reference numbers are our own full solutions by another program and
+ * another basis than the one that made the engine's tables: von Karman's energy minimised in monomials of degree 12 to 24 (even
+ * in both axes), membrane forces in the same degree, converged to 1 part in 10 000; the axisymmetric ones agree with an
+ * independent solution by nonlinear finite elements to 1 part in 1000. No printed values. Each tolerance is what `freeWaferShape`
+ * claims, or half a unit of the last digit written down where that is more.
  *
  *   S      curvature by small-deflection theory times R²/(4h)
  *   S_cr   S at which the plate starts to roll
@@ -13,8 +14,9 @@
 import { describe, expect, it } from "vitest";
 import { criticalFilmForce, criticalLinearCurvature } from "#app/engine/plate/critical-load.ts";
 import { freeWaferShape, type FreeWaferShape } from "#app/engine/plate/free-wafer-shape.ts";
-import { criticalLoad, trueOnsetFactor, uniformCoefficients } from "#app/engine/plate/shape-model.ts";
-import { equalCurvature, onsetCurvature, onsetLoad, stableState } from "#app/engine/plate/uniform-curvature.ts";
+import { criticalLoad } from "#app/engine/plate/shape-model.ts";
+import { isotropicRatios, membraneStiffness, siliconRatios } from "#app/engine/plate/shear-ratios.ts";
+import { bowlCurvature, onsetCurvature, onsetLoad, rolledCurvatures } from "#app/engine/plate/uniform-curvature.ts";
 import { siliconBiaxialModulus } from "#app/engine/silicon/biaxial-modulus.ts";
 import { relative } from "../relative.ts";
 
@@ -28,16 +30,24 @@ function shape(poissonsRatio: number, S: number | { x: number; y: number }, crys
   return freeWaferShape({ ...plate(poissonsRatio), crystal, linearCurvature });
 }
 
+/** What `freeWaferShape` claims: along the axis that bends most, and across it as a share of the value along it. */
+const CLAIMED = { bow: 0.001, parabola: 0.0015, centre: 0.003, warp: 0.002, bowAcross: 3e-4, curvatureAcross: 1.5e-3 };
+/** Half a unit of the fourth decimal. */
+const WRITTEN = 5e-5;
+
+/** Tolerance relative to a value, widened for how many digits it was written down with. */
+const near = (claim: number, value: number) => claim + WRITTEN / Math.abs(value);
+
 describe("uniform curvature: Freund 2000 and Freund and Suresh 2003, from memory of the named publications", () => {
-  const coefficients = uniformCoefficients({ poissonsRatio: 0.28 });
+  const ratios = isotropicRatios(0.28);
 
   it("bowl at S = 1, ν = 0.28: S = K (1 + (1 − ν) K²)", () => {
-    expect(equalCurvature(1, coefficients.alpha)).toBeCloseTo(0.7252920441231119, 13);
+    expect(bowlCurvature(1, ratios)).toBeCloseTo(0.7252920441231119, 13);
   });
 
   it("onset: K_cr = 1/sqrt(1 + ν), S_cr = 2/(1 + ν)^1.5", () => {
-    expect(onsetCurvature(coefficients)).toBeCloseTo(0.8838834764831844, 13);
-    expect(onsetLoad(coefficients)).toBeCloseTo(1.3810679320049757, 13);
+    expect(onsetCurvature(ratios)).toBeCloseTo(0.8838834764831844, 13);
+    expect(onsetLoad(ratios)).toBeCloseTo(1.3810679320049757, 13);
   });
 
   it("past the onset: κ_x κ_y = 16 h²/((1 + ν) R⁴), κ_x + κ_y = (1 + ν) κ_St", () => {
@@ -46,9 +56,11 @@ describe("uniform curvature: Freund 2000 and Freund and Suresh 2003, from memory
     const perK = (4 * thickness) / radius ** 2;
     const S = (6 * 40) / (modulus * thickness ** 2) / perK;
     expect(relative(S, 7.49101)).toBeLessThan(2e-6);
-    const { mean, halfDifference } = stableState({ mean: S, halfDifference: 0 }, coefficients);
-    expect(relative((mean + halfDifference) * perK, 0.169001)).toBeLessThan(5e-6);
-    expect(relative((mean - halfDifference) * perK, 0.00146102)).toBeLessThan(5e-6);
+    const { major, minor } = rolledCurvatures(S, ratios);
+    expect(relative(major * perK, 0.169001)).toBeLessThan(5e-6);
+    expect(relative(minor * perK, 0.00146102)).toBeLessThan(5e-6);
+    const before = rolledCurvatures(1, ratios);
+    expect(before.major).toBe(before.minor);
   });
 
   it.each([
@@ -70,21 +82,19 @@ describe("uniform curvature: Freund 2000 and Freund and Suresh 2003, from memory
         youngsModulus: 180.216e9 * 0.72,
         poissonsRatio: 0.28,
       });
-    const factor = trueOnsetFactor({ poissonsRatio: 0.28 });
+    const factor = criticalLoad({ poissonsRatio: 0.28 }) / onsetLoad(ratios);
     expect(relative(force(0.15), on300 * factor)).toBeLessThan(1e-12);
     expect(relative(force(0.1), on200 * factor)).toBeLessThan(1e-12);
     // Bow at the onset is 2 h K_cr for uniform curvature: 176.8 µm at 100 µm, whatever the diameter.
-    expect(relative(2 * micrometres * onsetCurvature(coefficients), micrometres * 1.767766952966369)).toBeLessThan(
-      1e-12,
-    );
+    expect(relative(2 * micrometres * onsetCurvature(ratios), micrometres * 1.767766952966369)).toBeLessThan(1e-12);
   });
 
   it("silicon (100): rolls about <100> at K = 0.8319, S = 1.3013", () => {
-    const crystal = uniformCoefficients({ poissonsRatio: 0.2785, crystal: "100" });
+    const crystal = siliconRatios();
     expect(relative(onsetCurvature(crystal), 0.8319)).toBeLessThan(2e-5);
     expect(relative(onsetLoad(crystal), 1.3013)).toBeLessThan(5e-5);
-    // E* = α M, the mean membrane stiffness.
-    expect(relative(crystal.alpha * siliconBiaxialModulus("100"), 146.955e9)).toBeLessThan(5e-6);
+    // E*, the mean membrane stiffness.
+    expect(relative(membraneStiffness(crystal) * siliconBiaxialModulus("100"), 146.955e9)).toBeLessThan(5e-6);
   });
 });
 
@@ -99,8 +109,10 @@ describe("onset of rolling in full", () => {
     [0.4, 1.0513],
     [0.45, 1.05475],
   ])("ν = %d: load over that of uniform curvature", (poissonsRatio, factor) => {
-    // The parabola in ν claims 0.0005.
-    expect(Math.abs(trueOnsetFactor({ poissonsRatio }) - factor)).toBeLessThan(5e-4);
+    const found = criticalLoad({ poissonsRatio }) / onsetLoad(isotropicRatios(poissonsRatio));
+    // Claimed: 0.05 %. The method page's parabola in ν claims twice that.
+    expect(relative(found, factor)).toBeLessThan(5e-4);
+    expect(relative(0.987 + 0.239 * poissonsRatio - 0.196 * poissonsRatio ** 2, factor)).toBeLessThan(1e-3);
   });
 
   it.each([
@@ -111,12 +123,13 @@ describe("onset of rolling in full", () => {
   ])("ν = %d: S_cr and bow over thickness there", (poissonsRatio, S, bow) => {
     expect(relative(criticalLoad({ poissonsRatio }), S)).toBeLessThan(5e-4);
     expect(relative(criticalLinearCurvature(plate(poissonsRatio)) / scale, S)).toBeLessThan(5e-4);
-    // The third-order formula at the far end of its range.
-    expect(relative(shape(poissonsRatio, S * 0.99999).bowMajor / h, bow)).toBeLessThan(5e-3);
+    // Three decimals written down.
+    const onset = criticalLoad({ poissonsRatio });
+    expect(relative(shape(poissonsRatio, onset * (1 - 1e-9)).bowMajor / h, bow)).toBeLessThan(CLAIMED.bow);
   });
 
   it("silicon (100)", () => {
-    expect(relative(criticalLoad({ poissonsRatio: 0.2785, crystal: "100" }), 1.34382)).toBeLessThan(1e-4);
+    expect(relative(criticalLoad({ poissonsRatio: 0.2785, crystal: "100" }), 1.34382)).toBeLessThan(5e-4);
   });
 });
 
@@ -130,10 +143,12 @@ describe("bowl before the onset, ν = 0.28", () => {
     [1.43, 1.6449, 0.5957, 0.7841],
   ])("S = %d: bow/h, and K of centre and parabola", (S, bow, centre, parabola) => {
     const result = shape(0.28, S);
-    expect(relative(result.bowMajor / h, bow)).toBeLessThan(3e-3);
+    expect(relative(result.bowMajor / h, bow)).toBeLessThan(near(CLAIMED.bow, bow));
     expect(result.bowMinor).toBe(result.bowMajor);
-    expect(relative(result.centreCurvatureMajor / scale, centre)).toBeLessThan(2e-2);
-    expect(relative(result.parabolaCurvatureMajor / scale, parabola)).toBeLessThan(5e-3);
+    expect(relative(result.centreCurvatureMajor / scale, centre)).toBeLessThan(near(CLAIMED.centre, centre));
+    expect(relative(result.parabolaCurvatureMajor / scale, parabola)).toBeLessThan(near(CLAIMED.parabola, parabola));
+    expect(relative(result.warp / h, bow)).toBeLessThan(near(CLAIMED.warp, bow));
+    expect(relative(result.threePointBow / h, bow)).toBeLessThan(near(CLAIMED.bow, bow));
     expect(result.regime).toBe("nonlinear");
     expect(result.rollRadius).toBeNull();
   });
@@ -181,21 +196,48 @@ const rolled = {
   ],
 } as const;
 
+describe("the bowl formula of the working, K (1 + (1 − ν) (17 + 5ν)/12 K²) = S", () => {
+  const formula = (S: number, nu: number) => {
+    // The positive root of K + a K³ = S.
+    const a = ((1 - nu) * (17 + 5 * nu)) / 12;
+    const stretch = Math.sqrt(3 * a);
+    return (2 / stretch) * Math.sinh(Math.asinh(1.5 * S * stretch) / 3);
+  };
+  const worst = (nu: number, crystal?: "100") => {
+    const onset = criticalLoad({ poissonsRatio: nu, crystal });
+    const errors = [0.1, 0.2, 0.3, 0.4, 0.5, 0.6, 0.7, 0.8, 0.9, 0.999].map((share) =>
+      relative(2 * formula(share * onset, nu), shape(nu, share * onset, crystal).bowMajor / h),
+    );
+    return Math.max(...errors);
+  };
+
+  it("is within 0.3 % of the full solution for usual ν, 0.7 % for silicon (100)", () => {
+    for (const nu of [0.17, 0.22, 0.28, 0.35]) expect(worst(nu)).toBeLessThan(0.003);
+    expect(worst(0.28, "100")).toBeLessThan(0.007);
+  });
+});
+
 describe("rolled past the onset", () => {
   const rows = Object.entries(rolled).flatMap(([nu, cases]) => cases.map((row) => [Number(nu), ...row] as const));
 
   it.each(rows)("ν = %d, S = %d", (nu, S, bow, minor, centre, centreMinor, parabola, parabolaMinor, warp) => {
     const result = shape(nu, S);
     expect(result.regime).toBe("curled");
-    expect(relative(result.bowMajor / h, bow)).toBeLessThan(0.02);
-    expect(Math.abs(result.bowMinor / h - minor)).toBeLessThan(0.35);
-    expect(relative(result.centreCurvatureMajor / scale, centre)).toBeLessThan(0.02);
-    expect(relative(result.parabolaCurvatureMajor / scale, parabola)).toBeLessThan(0.02);
-    // Across the roll the curvatures are small and change sign: judged against a curvature that gives 0.2 thicknesses of bow.
-    expect(Math.abs(result.centreCurvatureMinor / scale - centreMinor)).toBeLessThan(0.1);
-    expect(Math.abs(result.parabolaCurvatureMinor / scale - parabolaMinor)).toBeLessThan(0.1);
-    expect(relative(result.warp / h, warp)).toBeLessThan(0.02);
-    expect(relative(result.rollRadius ?? 0, 1 / (parabola * scale))).toBeLessThan(0.02);
+    expect(relative(result.bowMajor / h, bow)).toBeLessThan(near(CLAIMED.bow, bow));
+    // Across the roll the figures are small and change sign: judged against the one along it, or their own size.
+    const across = (claim: number, along: number, own: number) =>
+      Math.max(claim * along, 0.003 * Math.abs(own)) + WRITTEN;
+    expect(Math.abs(result.bowMinor / h - minor)).toBeLessThan(across(CLAIMED.bowAcross, bow, minor));
+    expect(relative(result.centreCurvatureMajor / scale, centre)).toBeLessThan(near(CLAIMED.centre, centre));
+    expect(relative(result.parabolaCurvatureMajor / scale, parabola)).toBeLessThan(near(CLAIMED.parabola, parabola));
+    expect(Math.abs(result.centreCurvatureMinor / scale - centreMinor)).toBeLessThan(
+      across(CLAIMED.curvatureAcross, centre, centreMinor),
+    );
+    expect(Math.abs(result.parabolaCurvatureMinor / scale - parabolaMinor)).toBeLessThan(
+      across(CLAIMED.curvatureAcross, parabola, parabolaMinor),
+    );
+    expect(relative(result.warp / h, warp)).toBeLessThan(near(CLAIMED.warp, warp));
+    expect(relative(result.rollRadius ?? 0, 1 / (parabola * scale))).toBeLessThan(near(CLAIMED.parabola, parabola));
   });
 
   it.each([
@@ -205,7 +247,13 @@ describe("rolled past the onset", () => {
     [6.71912, 15.6708],
     [26.8765, 66.1462],
   ])("silicon (100), S = %d: bow along <100>", (S, bow) => {
-    expect(relative(shape(0.2785, S, "100").bowMajor / h, bow)).toBeLessThan(0.025);
+    expect(relative(shape(0.2785, S, "100").bowMajor / h, bow)).toBeLessThan(near(CLAIMED.bow, bow));
+  });
+
+  it("far beyond the loads of a wafer line: 100 and 400 times the critical load, ν = 0.28", () => {
+    // The monomials of degree 20 themselves are only good to 1 part in 2000 here.
+    expect(relative(shape(0.28, 143.43531).bowMajor / h, 361.3137)).toBeLessThan(1e-3);
+    expect(relative(shape(0.28, 573.74125).bowMajor / h, 1457.6721)).toBeLessThan(1e-3);
   });
 
   it.each([
@@ -215,11 +263,7 @@ describe("rolled past the onset", () => {
     [20, 4],
   ])("at %d times the critical load uniform curvature over-predicts the bow by some %d percent", (ratio, percent) => {
     const S = ratio * criticalLoad({ poissonsRatio: 0.28 });
-    const { mean, halfDifference } = stableState(
-      { mean: S, halfDifference: 0 },
-      uniformCoefficients({ poissonsRatio: 0.28 }),
-    );
-    const excess = (2 * (mean + halfDifference) * h) / shape(0.28, S).bowMajor - 1;
+    const excess = (2 * rolledCurvatures(S, isotropicRatios(0.28)).major * h) / shape(0.28, S).bowMajor - 1;
     // Written down as whole percentages.
     expect(Math.abs(excess * 100 - percent)).toBeLessThan(1);
   });
@@ -227,36 +271,39 @@ describe("rolled past the onset", () => {
 
 describe("unequal curvatures, ν = 0.28", () => {
   it.each([
-    // S along x and y, bow along x and y over the thickness, tolerance on the larger one
-    [1.50607, 1.36264, 2.6441, 0.8816, 0.03],
-    [3.44245, 2.29496, 7.3331, 0.2721, 0.03],
-    [10.75765, 3.58588, 22.881, 0.0382, 0.03],
-    [1.29092, -0.43031, 2.4439, -0.3105, 0.07],
-    [8.60612, -2.86871, 16.0598, -0.0918, 0.07],
-    [14.34353, -8.60612, 24.7547, -0.1447, 0.07],
-  ])("S = %d and %d", (x, y, alongX, alongY, tolerance) => {
+    // S along x and y, bow along x and y over the thickness
+    [1.50607, 1.36264, 2.6441, 0.8816],
+    [3.44245, 2.29496, 7.3331, 0.2721],
+    [10.75765, 3.58588, 22.881, 0.0382],
+    [1.29092, -0.43031, 2.4439, -0.3105],
+    [8.60612, -2.86871, 16.0598, -0.0918],
+    [14.34353, -8.60612, 24.7547, -0.1447],
+  ])("S = %d and %d", (x, y, alongX, alongY) => {
     const result = shape(0.28, { x, y });
-    expect(relative(result.bowMajor / h, alongX)).toBeLessThan(tolerance);
-    expect(Math.abs(result.bowMinor / h - alongY)).toBeLessThan(0.35);
+    expect(relative(result.bowMajor / h, alongX)).toBeLessThan(near(CLAIMED.bow, alongX));
+    const across = Math.max(CLAIMED.bowAcross * alongX, 0.003 * Math.abs(alongY)) + WRITTEN;
+    expect(Math.abs(result.bowMinor / h - alongY)).toBeLessThan(across);
     expect(result.majorAxis).toBe("x");
+    expect(result.majorAngle).toBe(0);
     // The same load turned by a quarter, and upside down.
     const turned = shape(0.28, { x: y, y: x });
-    expect(turned).toEqual({ ...result, majorAxis: "y" });
+    expect(turned).toEqual({ ...result, majorAxis: "y", majorAngle: Math.PI / 2 });
     expect(shape(0.28, { x: -x, y: -y }).bowMajor).toBe(-result.bowMajor);
   });
 
   it("a saddle: S = 1.43435 and −1.43435", () => {
     const result = shape(0.28, { x: 1.43435, y: -1.43435 });
-    expect(relative(result.bowMajor / h, 1.6026)).toBeLessThan(0.07);
+    expect(relative(result.bowMajor / h, 1.6026)).toBeLessThan(CLAIMED.bow);
     expect(result.bowMinor).toBe(-result.bowMajor);
     expect(result.threePointBow).toBe(0);
-    expect(relative(result.warp / h, 3.2052)).toBeLessThan(0.07);
+    expect(relative(result.warp / h, 3.2052)).toBeLessThan(CLAIMED.warp);
   });
 
   it("a saddle under opposite moments snaps into a roll and has two stable shapes", () => {
     const result = shape(0.28, { x: 7.17177, y: -7.17177 });
     expect(result.regime).toBe("curled");
-    expect(relative(result.bowMajor / h, 10.6667)).toBeLessThan(0.2);
+    expect(relative(result.bowMajor / h, 10.6667)).toBeLessThan(CLAIMED.bow);
+    expect(Math.abs(result.bowMinor / h + 0.6279)).toBeLessThan(CLAIMED.bowAcross * 10.6667);
     expect(result.alternatives).toHaveLength(1);
     expect(result.alternatives[0]?.bowMajor).toBeCloseTo(-result.bowMajor, 15);
     // One-signed moments have no second shape of another size.
