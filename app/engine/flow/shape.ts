@@ -1,8 +1,8 @@
 import type { Layer } from "../laminate/layer.ts";
-import type { LaminateResult } from "../laminate/solve-laminate.ts";
+import type { LaminateBalance } from "../laminate/solve-laminate.ts";
 import { freeWaferShape, type FreeWaferShapeInput } from "../plate/free-wafer-shape.ts";
-import { siliconPlateConstants } from "../silicon/plane-constants.ts";
 import type { FaceUp, ShapeRegime, ShapeWord } from "../vocabulary.ts";
+import { waferConstants } from "./layers.ts";
 import type { FlowInput } from "./model.ts";
 
 /** Shape of a wafer or pair that lies free, device side up sign (a sagitta has the sign of the curvature). */
@@ -18,20 +18,25 @@ export interface LyingShape {
   /** load over the load at which it rolls about one axis */
   stabilityRatio: number;
   rollRadius: number | null;
-  /** what it was computed from: the laminate and the disc */
+  /** what it was computed from: the laminate, built when it is asked for, and the disc */
   layers: Layer[];
   disc: FreeWaferShapeInput;
+}
+
+/** A solved laminate of the flow's wafer. */
+export interface SolvedStack {
+  layers: () => Layer[];
+  solution: LaminateBalance;
+  temperature: number;
+  bonded: boolean;
 }
 
 /** Shape of a solved laminate as a free disc of the flow's wafer. */
 export function lyingShape(
   wafer: FlowInput["wafer"],
-  layers: Layer[],
-  solution: LaminateResult,
-  temperature: number,
-  bonded: boolean,
+  { layers, solution, temperature, bonded }: SolvedStack,
 ): LyingShape {
-  const { youngsModulus, poissonsRatio } = siliconPlateConstants(wafer.orientation);
+  const { youngsModulus, poissonsRatio } = waferConstants(wafer.orientation);
   const disc: FreeWaferShapeInput = {
     radius: wafer.diameter / 2,
     thickness: solution.effectiveThickness,
@@ -50,7 +55,9 @@ export function lyingShape(
     regime: shape.regime,
     stabilityRatio: shape.stabilityRatio,
     rollRadius: shape.rollRadius,
-    layers,
+    get layers() {
+      return layers();
+    },
     disc,
   };
 }

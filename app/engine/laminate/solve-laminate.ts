@@ -1,8 +1,10 @@
 import { EngineInputError } from "../errors.ts";
-import { freeStrain, type NamedLayer } from "./free-strain.ts";
+import type { NamedLayer } from "./free-strain.ts";
 import { checkLayer, ROOM_TEMPERATURE, type Layer } from "./layer.ts";
+import { placeLayers, type PlacedLayer } from "./placed-layers.ts";
 
-export interface LaminateResult {
+/** How a stack bends and stretches as a whole. */
+export interface LaminateBalance {
   /** 1/m, positive when the top face (device side) is concave. */
   curvature: number;
   /** Strain of the stack's mid-plane against the flat base at 298.15 K. */
@@ -13,6 +15,9 @@ export interface LaminateResult {
   bendingStiffness: number;
   /** sqrt(12 D/A) with the bending stiffness D and the stretching stiffness A, m: the thickness of one layer for one layer. */
   effectiveThickness: number;
+}
+
+export interface LaminateResult extends LaminateBalance {
   /** Free strain of each layer, as by `layerFreeStrain`. */
   freeStrain: number[];
   /** Stress in each layer itself at its lower face, Pa. */
@@ -36,29 +41,16 @@ export interface LaminateResult {
  * Source: Townsend, Barnett and Brunner 1987; Hsueh 2002; Hsueh, Lee and Chuang 2003. Two layers: Freund, Floro and Chason 1999.
  */
 export function solveLaminate(layersBottomToTop: readonly Layer[], o: { temperature?: number } = {}): LaminateResult {
-  const temperature = o.temperature ?? ROOM_TEMPERATURE;
-  const layers = place(layersBottomToTop, temperature);
-  const stretching = sum(layers, (l) => l.stiffness);
-  if (!(stretching > 0)) {
-    throw new EngineInputError("layers", "no layer covers any area, so the stack has no stiffness");
-  }
-  const neutralPlane = sum(layers, (l) => l.stiffness * l.centre) / stretching;
-  const meanStrain = sum(layers, (l) => l.stiffness * l.freeStrain) / stretching;
-  // Taken about the neutral plane and against the mean strain, so that nothing large cancels for a thin film on a wafer.
-  const bendingStiffness = sum(
-    layers,
-    (l) => l.stiffness * ((l.thickness * l.thickness) / 12 + (l.centre - neutralPlane) ** 2),
-  );
-  const moment = sum(layers, (l) => l.stiffness * (l.freeStrain - meanStrain) * (l.centre - neutralPlane));
-  const strainPerHeight = moment / bendingStiffness;
+  const named = layersBottomToTop.map((layer, n): NamedLayer => {
+    const field = `layers[${n}]`;
+    return { layer: checkLayer(layer, field), field };
+  });
+  const layers = placeLayers(named, o.temperature ?? ROOM_TEMPERATURE);
+  const balance = balanceLayers(layers);
   const stressAt = (l: PlacedLayer, z: number) =>
-    l.biaxialModulus * (meanStrain - l.freeStrain + strainPerHeight * (z - neutralPlane));
+    l.biaxialModulus * (balance.midplaneStrain - balance.curvature * z - l.freeStrain);
   return {
-    curvature: strainPerHeight === 0 ? 0 : -strainPerHeight,
-    midplaneStrain: meanStrain - strainPerHeight * neutralPlane,
-    neutralPlane,
-    bendingStiffness,
-    effectiveThickness: Math.sqrt((12 * bendingStiffness) / stretching),
+    ...balance,
     freeStrain: layers.map((l) => l.freeStrain),
     stressBottom: layers.map((l) => stressAt(l, l.centre - l.thickness / 2)),
     stressTop: layers.map((l) => stressAt(l, l.centre + l.thickness / 2)),
@@ -66,47 +58,35 @@ export function solveLaminate(layersBottomToTop: readonly Layer[], o: { temperat
   };
 }
 
-interface PlacedLayer {
-  thickness: number;
-  biaxialModulus: number;
-  /** Biaxial modulus times thickness times coverage, N/m. */
-  stiffness: number;
-  /** Height of the layer's middle over the mid-plane of the stack, m. */
-  centre: number;
-  freeStrain: number;
-}
-
-function place(layersBottomToTop: readonly Layer[], temperature: number): PlacedLayer[] {
-  const named: NamedLayer[] = layersBottomToTop.map((layer, n) => {
-    const field = `layers[${n}]`;
-    return { layer: checkLayer(layer, field), field };
-  });
-  const base = findBase(named);
-  const total = sum(named, ({ layer }) => layer.thickness);
-  let below = 0;
-  return named.map((entry) => {
-    const { thickness, biaxialModulus, coverage } = entry.layer;
-    const centre = below + thickness / 2 - total / 2;
-    below += thickness;
-    return {
-      thickness,
-      biaxialModulus,
-      stiffness: biaxialModulus * thickness * coverage,
-      centre,
-      freeStrain: freeStrain(entry, base, temperature),
-    };
-  });
-}
-
-/** The layer whose flat state is the zero of strain: the first that expands as silicon, else the thickest. */
-export function findBase(layers: NamedLayer[]): NamedLayer {
-  const silicon = layers.find(({ layer }) => layer.cte === "silicon");
-  if (silicon) return silicon;
-  const [first, ...rest] = layers;
-  if (!first) throw new EngineInputError("layers", "the stack is empty", "at least one layer");
-  return rest.reduce((thickest, next) => (next.layer.thickness > thickest.layer.thickness ? next : thickest), first);
-}
-
-function sum<T>(items: readonly T[], of: (item: T) => number): number {
-  return items.reduce((total, item) => total + of(item), 0);
+/** The part of `solveLaminate` that concerns the stack as a whole, for layers that are checked and placed already. */
+export function balanceLayers(layers: readonly PlacedLayer[]): LaminateBalance {
+  let stretching = 0;
+  let firstMoment = 0;
+  let force = 0;
+  for (const l of layers) {
+    stretching += l.stiffness;
+    firstMoment += l.stiffness * l.centre;
+    force += l.stiffness * l.freeStrain;
+  }
+  if (!(stretching > 0)) {
+    throw new EngineInputError("layers", "no layer covers any area, so the stack has no stiffness");
+  }
+  const neutralPlane = firstMoment / stretching;
+  const meanStrain = force / stretching;
+  // Taken about the neutral plane and against the mean strain, so that nothing large cancels for a thin film on a wafer.
+  let bendingStiffness = 0;
+  let moment = 0;
+  for (const l of layers) {
+    const height = l.centre - neutralPlane;
+    bendingStiffness += l.stiffness * ((l.thickness * l.thickness) / 12 + height * height);
+    moment += l.stiffness * (l.freeStrain - meanStrain) * height;
+  }
+  const strainPerHeight = moment / bendingStiffness;
+  return {
+    curvature: strainPerHeight === 0 ? 0 : -strainPerHeight,
+    midplaneStrain: meanStrain - strainPerHeight * neutralPlane,
+    neutralPlane,
+    bendingStiffness,
+    effectiveThickness: Math.sqrt((12 * bendingStiffness) / stretching),
+  };
 }

@@ -1,0 +1,89 @@
+import { flowStrains, type StressBound } from "../laminate/bounded-stress.ts";
+import type { Layer } from "../laminate/layer.ts";
+import { letFlow, placeLayers, type PlacedLayer } from "../laminate/placed-layers.ts";
+import { balanceLayers, type LaminateBalance } from "../laminate/solve-laminate.ts";
+import { stressBound } from "./film-limits.ts";
+import { layersOf, type LayerStack } from "./layers.ts";
+import type { FilmState, WaferState } from "./state.ts";
+
+/** A stack at a temperature, its layers at their heights with what they have flowed. */
+export interface PlacedStack extends LayerStack {
+  placed: PlacedLayer[];
+}
+
+export interface Settled extends PlacedStack {
+  state: WaferState;
+  temperature: number;
+  heldFlat: boolean;
+  solution: LaminateBalance;
+}
+
+export interface SettleOptions {
+  /** false keeps every metal elastic */
+  metalHistory: boolean;
+  /** true for a wafer on tape or frame: its films are stressed as in a flat stack, `solution` is that of the stack let go */
+  heldFlat: boolean;
+}
+
+/** The layers of a stack with the strains that they have flowed, for a working. */
+export function statedLayers({ entries, placed }: PlacedStack): Layer[] {
+  return entries.map(({ stated }, at) => {
+    const plasticStrain = placed[at]?.flowed ?? 0;
+    return plasticStrain === 0 ? stated : { ...stated, plasticStrain };
+  });
+}
+
+/**
+ * The laminate at a temperature with its films at their limits: a metal beyond its yield stress flows and keeps the strain
+ * (kinematic: on reversal it answers elastically over twice the yield stress); a polymer stops at zero stress and keeps
+ * nothing. All films are solved together inside the laminate, exactly.
+ */
+export function settle(state: WaferState, temperature: number, { metalHistory, heldFlat }: SettleOptions): Settled {
+  const stack = placeStack(layersOf(state, temperature, { carrier: true }), temperature);
+  const { placed, films } = stack;
+  const bounds: StressBound[] = [];
+  films.forEach((film, at) => {
+    const layer = placed[at];
+    const bound = film && layer ? stressBound(film.addition, layer, temperature, metalHistory) : null;
+    if (bound) bounds.push(bound);
+  });
+  let solution = balanceLayers(placed);
+  const strains = flowStrains(placed, bounds, solution, heldFlat);
+  if (strains) {
+    bounds.forEach(({ layer }, n) => letFlow(layer, strains[n] ?? 0));
+    solution = balanceLayers(placed);
+  }
+  const back = state.back.map((film, n) => renewed(film, temperature, placed[state.back.length - 1 - n]));
+  const firstFront = state.back.length + state.siliconEntries.length;
+  const front = state.front.map((film, n) => renewed(film, temperature, placed[firstFront + n]));
+  return { ...stack, state: { ...state, back, front }, temperature, heldFlat, solution };
+}
+
+/** The layers of a stack at a temperature (K), with what its films have flowed so far. */
+export function placeStack(stack: LayerStack, temperature: number): PlacedStack {
+  const placed = placeLayers(stack.entries, temperature);
+  stack.films.forEach((film, at) => {
+    const layer = placed[at];
+    if (layer && film && film.plasticStrain !== 0) letFlow(layer, film.plasticStrain);
+  });
+  return { ...stack, placed };
+}
+
+/** Mean stress of each film, Pa: as the stack lies by itself, or with its bending taken out by what holds it flat. */
+export function filmStresses({ placed, films, solution, heldFlat }: Settled): { film: FilmState; stress: number }[] {
+  const { midplaneStrain, curvature, neutralPlane } = solution;
+  return films.flatMap((film, at) => {
+    const layer = placed[at];
+    if (!film || !layer) return [];
+    const strain = midplaneStrain - curvature * (heldFlat ? neutralPlane : layer.centre);
+    return [{ film, stress: layer.biaxialModulus * (strain - layer.freeStrain) }];
+  });
+}
+
+/** The film after it has been at a temperature: a metal keeps what it has flowed. The same object when nothing changed. */
+function renewed(film: FilmState, temperature: number, layer: PlacedLayer | undefined): FilmState {
+  const { addition, entry } = film;
+  const plasticStrain = addition.film.kind === "metal" && layer ? layer.flowed : film.plasticStrain;
+  if (plasticStrain === film.plasticStrain && temperature <= film.hottest) return film;
+  return { addition, entry, plasticStrain, hottest: Math.max(film.hottest, temperature) };
+}
