@@ -334,6 +334,13 @@ export const SOURCES = {
     place: "estimate; a rectangle rolls at another size than a disc",
     basis: "own derivation",
   },
+  "sliding-pair": {
+    author: "this program",
+    title: "Pair of plates on an adhesive that flows: shared curvature, no shear, and the state in which it locks",
+    year: null,
+    place: "balance of forces of each plate and of the moments of both",
+    basis: "own derivation",
+  },
   "common-practice": {
     author: "the trade",
     title: "Common practice in wafer handling",

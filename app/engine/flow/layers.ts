@@ -3,7 +3,8 @@ import { checkLayer, type Layer } from "../laminate/layer.ts";
 import { siliconPlateConstants, type PlateConstants } from "../silicon/plane-constants.ts";
 import type { Orientation } from "../silicon/orientation.ts";
 import type { FilmAddition } from "./model.ts";
-import type { BondState, FilmState, WaferState } from "./state.ts";
+import { glassTransition, lockTemperature, type BondState } from "./bond.ts";
+import type { FilmState, WaferState } from "./state.ts";
 
 /** Depth over which a ground face carries its force, m: subsurface damage of a ground wafer (Marks 2014, `marks-2014`). */
 const GROUND_FACE_DEPTH = 0.2e-6;
@@ -62,43 +63,43 @@ export function siliconEntries(orientation: Orientation, thickness: number, grou
   ];
 }
 
-/**
- * Temperature at which the pair is at rest: that of bonding or, if lower, the softening point, below which the material
- * transmits mismatch (common practice, no source).
- */
-export function lockTemperature(bond: BondState): number {
-  const softening = bond.material.softening?.value ?? Infinity;
-  return Math.min(bond.bondTemperature, softening);
-}
-
-/** Share of its locked-in modulus that a bonding material keeps above its softening point (common practice, no source). */
+/** Share of its locked-in modulus that a bonding material keeps above its glass transition (common practice, no source). */
 const SOFT_SHARE = 0.01;
 
-function bondEntries(bond: BondState, temperature: number): StackEntry[] {
-  const referenceTemperature = lockTemperature(bond);
-  const soft = bond.material.softening !== null && temperature > bond.material.softening.value;
-  return [
-    entry(
-      {
-        thickness: bond.thickness.value,
-        youngsModulus: bond.material.effectiveModulus.value * (soft ? SOFT_SHARE : 1),
-        poissonsRatio: bond.material.poissonsRatio.value,
-        cte: soft ? bond.material.expansionAbove.value : bond.material.expansionBelow.value,
-        referenceTemperature,
-      },
-      bond.material.name,
-    ),
-    entry(
-      {
-        thickness: bond.carrier.thickness.value,
-        youngsModulus: bond.carrier.youngsModulus.value,
-        poissonsRatio: bond.carrier.poissonsRatio.value,
-        cte: bond.carrier.expansion === null ? "silicon" : bond.carrier.expansion.value,
-        referenceTemperature,
-      },
-      bond.carrier.name,
-    ),
-  ];
+function adhesiveEntry(bond: BondState, temperature: number): StackEntry {
+  const { material, thickness, rest } = bond;
+  const soft = temperature > (glassTransition(material) ?? Infinity);
+  return entry(
+    {
+      thickness: thickness.value,
+      youngsModulus: material.effectiveModulus.value * (soft ? SOFT_SHARE : 1),
+      poissonsRatio: material.poissonsRatio.value,
+      cte: soft ? material.expansionAbove.value : material.expansionBelow.value,
+      referenceTemperature: lockTemperature(bond),
+      plasticStrain: rest?.adhesiveStrain ?? 0,
+    },
+    material.name,
+  );
+}
+
+function carrierEntry(bond: BondState): StackEntry {
+  const { carrier, rest } = bond;
+  return entry(
+    {
+      thickness: carrier.thickness.value,
+      youngsModulus: carrier.youngsModulus.value,
+      poissonsRatio: carrier.poissonsRatio.value,
+      cte: carrier.expansion === null ? "silicon" : carrier.expansion.value,
+      referenceTemperature: lockTemperature(bond),
+      plasticStrain: rest?.carrierStrain ?? 0,
+    },
+    carrier.name,
+  );
+}
+
+/** The carrier by itself, as a plate that slides on the wafer. */
+export function carrierPlate(bond: BondState): StackEntry[] {
+  return [carrierEntry(bond)];
 }
 
 /** The laminate of a state at a temperature (K), with or without the carrier that it is bonded to. */
@@ -112,6 +113,11 @@ export function layersOf(state: WaferState, temperature: number, options: { carr
   for (const film of state.back.toReversed()) put(film.entry, film);
   for (const silicon of state.siliconEntries) put(silicon, null);
   for (const film of state.front) put(film.entry, film);
-  if (options.carrier && state.bond) for (const part of bondEntries(state.bond, temperature)) put(part, null);
+  if (options.carrier && state.bond) {
+    put(adhesiveEntry(state.bond, temperature), null);
+    put(carrierEntry(state.bond), null);
+  }
   return { entries, films };
 }
+
+export { lockTemperature };

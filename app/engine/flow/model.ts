@@ -87,8 +87,12 @@ export type ReleaseMethod = (typeof RELEASE_METHODS)[number];
 
 /**
  * A temporary bonding material. `effectiveModulus` is the locked-in modulus that couples the pair, calibrated on measured
- * pairs and far below the data sheet's. `softening` is the glass transition or softening point; `flows` is true for a
- * thermoplastic, which flows above it, false for a cross-linked material, which does not.
+ * pairs and far below the data sheet's. `flows` is true for a thermoplastic, false for a cross-linked material.
+ *
+ * `softening` is what data sheets call glass transition or softening point. Where it is known better, `glassTransition` says
+ * where the material turns from its locked-in modulus to a rubber (by default the softening point), and `flowPoint`, of a
+ * thermoplastic alone, from where on the plates slide. Without a flow point nothing slides: the pair keeps the state of rest
+ * that it was bonded in, and a step that reaches the softening point says so in its remarks.
  */
 export interface BondingMaterialInput {
   id: string;
@@ -98,6 +102,8 @@ export interface BondingMaterialInput {
   expansionBelow: Measured;
   expansionAbove: Measured;
   softening: Measured | null;
+  glassTransition?: Measured | null;
+  flowPoint?: Measured | null;
   flows: boolean;
   bondTemperature: Measured;
   temperatureLimit: Measured;

@@ -3,7 +3,8 @@ import type { Layer } from "../laminate/layer.ts";
 import { letFlow, placeLayers, type PlacedLayer } from "../laminate/placed-layers.ts";
 import { balanceLayers, type LaminateBalance } from "../laminate/solve-laminate.ts";
 import { stressBound } from "./film-limits.ts";
-import { layersOf, type LayerStack } from "./layers.ts";
+import { locked, slides } from "./bond.ts";
+import { carrierPlate, layersOf, type LayerStack, type StackEntry } from "./layers.ts";
 import type { FilmState, WaferState } from "./state.ts";
 
 /** A stack at a temperature, its layers at their heights with what they have flowed. */
@@ -16,6 +17,8 @@ export interface Settled extends PlacedStack {
   temperature: number;
   heldFlat: boolean;
   solution: LaminateBalance;
+  /** the carrier when it slides on the wafer; `entries` are those of the wafer then */
+  slidingOn: StackEntry[] | null;
 }
 
 export interface SettleOptions {
@@ -36,10 +39,14 @@ export function statedLayers({ entries, placed }: PlacedStack): Layer[] {
 /**
  * The laminate at a temperature with its films at their limits: a metal beyond its yield stress flows and keeps the strain
  * (kinematic: on reversal it answers elastically over twice the yield stress); a polymer stops at zero stress and keeps
- * nothing. All films are solved together inside the laminate, exactly.
+ * nothing. All films are solved together inside the laminate, exactly. A bonding material at its flow point lets carrier and
+ * wafer slide: they share one curvature and nothing else.
  */
 export function settle(state: WaferState, temperature: number, { metalHistory, heldFlat }: SettleOptions): Settled {
-  const stack = placeStack(layersOf(state, temperature, { carrier: true }), temperature);
+  const sliding = state.bond !== null && slides(state.bond, temperature);
+  const slidingOn = state.bond && sliding ? carrierPlate(state.bond) : null;
+  const plate = slidingOn ? balanceLayers(placeLayers(slidingOn, temperature)) : undefined;
+  const stack = placeStack(layersOf(state, temperature, { carrier: !sliding }), temperature);
   const { placed, films } = stack;
   const bounds: StressBound[] = [];
   films.forEach((film, at) => {
@@ -47,16 +54,16 @@ export function settle(state: WaferState, temperature: number, { metalHistory, h
     const bound = film && layer ? stressBound(film.addition, layer, temperature, metalHistory) : null;
     if (bound) bounds.push(bound);
   });
-  let solution = balanceLayers(placed);
-  const strains = flowStrains(placed, bounds, solution, heldFlat);
+  let solution = balanceLayers(placed, plate);
+  const strains = flowStrains(placed, bounds, solution, { heldFlat, slidingOn: plate });
   if (strains) {
     bounds.forEach(({ layer }, n) => letFlow(layer, strains[n] ?? 0));
-    solution = balanceLayers(placed);
+    solution = balanceLayers(placed, plate);
   }
   const back = state.back.map((film, n) => renewed(film, temperature, placed[state.back.length - 1 - n]));
   const firstFront = state.back.length + state.siliconEntries.length;
   const front = state.front.map((film, n) => renewed(film, temperature, placed[firstFront + n]));
-  return { ...stack, state: { ...state, back, front }, temperature, heldFlat, solution };
+  return { ...stack, state: { ...state, back, front }, temperature, heldFlat, solution, slidingOn };
 }
 
 /** The layers of a stack at a temperature (K), with what its films have flowed so far. */
@@ -86,4 +93,19 @@ function renewed(film: FilmState, temperature: number, layer: PlacedLayer | unde
   const plasticStrain = addition.film.kind === "metal" && layer ? layer.flowed : film.plasticStrain;
   if (plasticStrain === film.plasticStrain && temperature <= film.hottest) return film;
   return { addition, entry, plasticStrain, hottest: Math.max(film.hottest, temperature) };
+}
+
+/**
+ * The wafer of a sliding pair once it has cooled to its flow point and locks in the shape that it has there: flat where a tool
+ * holds it flat.
+ */
+export function lockedState({ state, placed, solution, temperature }: Settled, flat: boolean): WaferState {
+  if (!state.bond) return state;
+  const { midplaneStrain, curvature, neutralPlane } = solution;
+  const top = placed.reduce((sum, { thickness }) => sum + thickness, 0) / 2;
+  const adhesive = top + state.bond.thickness.value / 2;
+  const carrier = top + state.bond.thickness.value + state.bond.carrier.thickness.value / 2;
+  const strainAt = (z: number) => midplaneStrain - curvature * (flat ? neutralPlane : z);
+  const bond = locked(state.bond, temperature, { adhesive: strainAt(adhesive), carrier: strainAt(carrier) });
+  return { ...state, bond };
 }

@@ -20,6 +20,8 @@ export interface LyingShape {
   rollRadius: number | null;
   /** what it was computed from: the laminate, built when it is asked for, and the disc */
   layers: Layer[];
+  /** the carrier, where it slides on these layers */
+  slidingOn?: Layer[];
   disc: FreeWaferShapeInput;
 }
 
@@ -29,12 +31,13 @@ export interface SolvedStack {
   solution: LaminateBalance;
   temperature: number;
   bonded: boolean;
+  slidingOn?: Layer[] | undefined;
 }
 
 /** Shape of a solved laminate as a free disc of the flow's wafer. */
 export function lyingShape(
   wafer: FlowInput["wafer"],
-  { layers, solution, temperature, bonded }: SolvedStack,
+  { layers, solution, temperature, bonded, slidingOn }: SolvedStack,
 ): LyingShape {
   const { youngsModulus, poissonsRatio } = waferConstants(wafer.orientation);
   const disc: FreeWaferShapeInput = {
@@ -58,6 +61,7 @@ export function lyingShape(
     get layers() {
       return layers();
     },
+    ...(slidingOn ? { slidingOn } : {}),
     disc,
   };
 }

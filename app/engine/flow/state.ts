@@ -3,8 +3,9 @@ import type { Measured } from "../measured.ts";
 import type { Orientation } from "../silicon/orientation.ts";
 import type { FaceUp, Holding, Side } from "../vocabulary.ts";
 import { ROOM_TEMPERATURE } from "../laminate/layer.ts";
+import type { BondState } from "./bond.ts";
 import { filmEntry, siliconEntries, type StackEntry } from "./layers.ts";
-import type { BondInput, FilmAddition, FlowInput, StepInput } from "./model.ts";
+import type { FilmAddition, FlowInput, StepInput } from "./model.ts";
 
 /** A film as it is on the wafer, with what it has been through. */
 export interface FilmState {
@@ -15,11 +16,6 @@ export interface FilmState {
   plasticStrain: number;
   /** hottest step so far, K */
   hottest: number;
-}
-
-/** A bond as it is: what joins the pair, and the temperature at which it was made. */
-export interface BondState extends BondInput {
-  bondTemperature: number;
 }
 
 /** The wafer between two steps. Films are listed from the silicon outwards. */
@@ -162,6 +158,8 @@ function sameBond(a: BondState | null, b: BondState | null): boolean {
     a?.carrier === b?.carrier &&
     a?.material === b?.material &&
     a?.thickness === b?.thickness &&
-    a?.bondTemperature === b?.bondTemperature
+    a?.bondTemperature === b?.bondTemperature &&
+    a?.rest?.carrierStrain === b?.rest?.carrierStrain &&
+    a?.rest?.adhesiveStrain === b?.rest?.adhesiveStrain
   );
 }

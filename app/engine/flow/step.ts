@@ -2,9 +2,10 @@ import { EngineInputError } from "../errors.ts";
 import { ROOM_TEMPERATURE } from "../laminate/layer.ts";
 import { balanceLayers } from "../laminate/solve-laminate.ts";
 import type { Holding } from "../vocabulary.ts";
+import { flowPoint, slides } from "./bond.ts";
 import { layersOf } from "./layers.ts";
 import type { FlowInput, StepInput } from "./model.ts";
-import { placeStack, settle, statedLayers, type Settled } from "./settle.ts";
+import { lockedState, placeStack, settle, statedLayers, type Settled, type SettleOptions } from "./settle.ts";
 import { lyingShape, type LyingShape } from "./shape.ts";
 import { applyStep, type WaferState } from "./state.ts";
 
@@ -38,8 +39,20 @@ export function takeStep(
   const flat = heldFlat(step.planned);
   const options = { metalHistory, heldFlat: flat };
   const hot = settle(applied, step.peakTemperature, options);
-  const cold = step.peakTemperature === ROOM_TEMPERATURE ? hot : settle(hot.state, ROOM_TEMPERATURE, options);
+  const cooling = slides(applied.bond, step.peakTemperature) ? relock(before, hot, step, options) : hot.state;
+  const cold = step.peakTemperature === ROOM_TEMPERATURE ? hot : settle(cooling, ROOM_TEMPERATURE, options);
   return { after: cold.state, hot, cold, flat };
+}
+
+/**
+ * A pair that has slid, cooled to where it locks. One that is bonded in this step is pressed flat while it cools, and rests flat
+ * on the silicon; one that was bonded before locks as it lies, flat on a tool that holds it flat.
+ */
+function relock(before: WaferState, hot: Settled, step: StepInput, options: SettleOptions): WaferState {
+  const from = hot.state.bond ? flowPoint(hot.state.bond.material) : null;
+  if (!before.bond || from === null) return hot.state;
+  const flat = options.heldFlat || step.equipment?.atPeak === "held";
+  return lockedState(settle(hot.state, from, { ...options, heldFlat: flat }), flat);
 }
 
 /** Shape at 25 °C after the step as it lies on the tool; null when tape or frame holds it flat. */
@@ -63,7 +76,8 @@ export function releasedShape(wafer: Wafer, { after, cold }: WalkedStep): LyingS
 
 function settledShape(wafer: Wafer, settled: Settled, bonded: boolean): LyingShape {
   const { solution, temperature } = settled;
-  return lyingShape(wafer, { layers: () => statedLayers(settled), solution, temperature, bonded });
+  const slidingOn = settled.slidingOn?.map(({ stated }) => stated);
+  return lyingShape(wafer, { layers: () => statedLayers(settled), solution, temperature, bonded, slidingOn });
 }
 
 /** How errors name a step, by its index. */

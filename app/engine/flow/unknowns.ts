@@ -74,6 +74,14 @@ export function unknowns(flow: FlowInput): Unknown[] {
       "material",
       "expansionBelow",
     );
+    note(
+      `flow point ${material.id}`,
+      `${material.name}, flow point`,
+      material.flowPoint,
+      ...at,
+      "material",
+      "flowPoint",
+    );
   });
   return [...found.values()];
 }

@@ -1,6 +1,7 @@
 import type { SiteLimits } from "../rules/limits.ts";
 import type { ShapeWord } from "../vocabulary.ts";
 import type { FlowInput, StepInput } from "./model.ts";
+import { stepRemarks } from "./remarks.ts";
 import { filmStresses } from "./settle.ts";
 import { shapeWord, type LyingShape } from "./shape.ts";
 import { allFilms, initialState, type WaferState } from "./state.ts";
@@ -21,6 +22,8 @@ export interface StepState {
   lies: ShapeWord;
   /** sum of σ·h·coverage over the films of a side at 25 °C, N/m; the back includes the ground face */
   filmForce: { front: number; back: number };
+  /** what the figures of this step rest on that nobody stated, a sentence each */
+  remarks: string[];
   filmStress: { name: string; side: "front" | "back"; stress: number }[];
 }
 
@@ -64,6 +67,7 @@ function describe(
     released: atRoom && !after.bond ? atRoom : releasedShape(wafer, walked),
     lies: shapeWord(atRoom, after.faceUp, limits.flatWithin.value),
     filmForce: filmForces(after),
+    remarks: stepRemarks(place.step, after),
     filmStress: filmStresses(cold).map(({ film, stress }) => ({
       name: film.addition.film.name,
       side: film.addition.side,

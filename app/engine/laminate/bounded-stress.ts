@@ -1,5 +1,5 @@
 import type { PlacedLayer } from "./placed-layers.ts";
-import type { LaminateBalance } from "./solve-laminate.ts";
+import type { LaminateBalance, SlidingPlate } from "./solve-laminate.ts";
 
 /** Limits of the mean stress of one layer, Pa, `low` not above `high`. Beyond them it flows without carrying more. */
 export interface StressBound {
@@ -19,13 +19,15 @@ interface Problem {
   bounds: readonly StressBound[];
   neutralPlane: number;
   heldFlat: boolean;
+  slidingOn: SlidingPlate | undefined;
 }
 
 const MOST_STEPS = 200;
 
 /**
  * Flow strain of each bound, to be added to the free strain of its layer, such that no mean stress passes its limits and the
- * stack is in balance; null when the elastic stack already keeps them. `heldFlat` balances forces alone, curvature zero.
+ * stack is in balance; null when the elastic stack already keeps them. `heldFlat` balances forces alone, curvature zero;
+ * `slidingOn` is a plate that `elastic` was balanced with.
  *
  * Stress limited from both sides derives from a convex energy of the two numbers that describe the strain, so the answer is
  * unique. Newton's method on the set of layers that flow, each step cut where the energy stops falling, ends exactly as soon as
@@ -37,9 +39,9 @@ export function flowStrains(
   layers: readonly PlacedLayer[],
   bounds: readonly StressBound[],
   elastic: LaminateBalance,
-  heldFlat: boolean,
+  { heldFlat, slidingOn }: { heldFlat: boolean; slidingOn?: SlidingPlate | undefined },
 ): number[] | null {
-  const problem: Problem = { layers, bounds, neutralPlane: elastic.neutralPlane, heldFlat };
+  const problem: Problem = { layers, bounds, neutralPlane: elastic.neutralPlane, heldFlat, slidingOn };
   let strain: PlaneStrain = {
     mean: elastic.midplaneStrain - elastic.curvature * elastic.neutralPlane,
     perHeight: heldFlat ? 0 : -elastic.curvature,
@@ -84,6 +86,10 @@ function newtonTarget(problem: Problem, strain: PlaneStrain): { target: PlaneStr
     d += l.stiffness * ((l.thickness * l.thickness) / 12 + z * z);
     force += l.stiffness * l.freeStrain;
     moment += l.stiffness * l.freeStrain * z;
+  }
+  if (problem.slidingOn) {
+    d += problem.slidingOn.bendingStiffness;
+    moment -= problem.slidingOn.bendingStiffness * problem.slidingOn.curvature;
   }
   const zones = bounds.map((bound) => zoneOf(problem, bound, strain));
   bounds.forEach((bound, n) => {
@@ -139,8 +145,9 @@ function stopShort(problem: Problem, from: PlaneStrain, to: PlaneStrain): PlaneS
 
 /** Change of the stack's energy per unit of the way, J/m2: force times mean strain and moment times strain per height. */
 function work(problem: Problem, strain: PlaneStrain, way: PlaneStrain): number {
-  const { layers, bounds, neutralPlane } = problem;
-  let [force, moment] = [0, 0];
+  const { layers, bounds, neutralPlane, slidingOn } = problem;
+  let force = 0;
+  let moment = slidingOn ? slidingOn.bendingStiffness * (strain.perHeight + slidingOn.curvature) : 0;
   for (const l of layers) {
     const z = l.centre - neutralPlane;
     const pull = (l.stiffness / l.biaxialModulus) * trialStress(problem, l, strain);

@@ -13,8 +13,17 @@ export interface LaminateBalance {
   neutralPlane: number;
   /** Biaxial bending stiffness about the neutral plane, N·m: M h³/12 for one layer. */
   bendingStiffness: number;
+  /** Stretching stiffness, the sum of M h, N/m. */
+  stretchingStiffness: number;
   /** sqrt(12 D/A) with the bending stiffness D and the stretching stiffness A, m: the thickness of one layer for one layer. */
   effectiveThickness: number;
+}
+
+export interface LaminateOptions {
+  /** K, default 298.15 */
+  temperature?: number;
+  /** a second stack on top that slides, bottom to top */
+  slidingOn?: readonly Layer[];
 }
 
 export interface LaminateResult extends LaminateBalance {
@@ -38,15 +47,21 @@ export interface LaminateResult extends LaminateBalance {
  * expands as silicon, else the thickest. The curvature holds while the slope stays small; whether the wafer can follow it
  * is a question for `freeWaferShape`. Bad input throws `EngineInputError` naming the layer.
  *
+ * `slidingOn` is a second stack that lies on the first and slides on it without friction, as on an adhesive that has become a
+ * liquid: both take one curvature, each stays free of force, so their bending stiffnesses add and so do the moments that each
+ * would bend itself with. Strains and stresses are those of the first stack; base and zero of strain too.
+ *
  * Source: Townsend, Barnett and Brunner 1987; Hsueh 2002; Hsueh, Lee and Chuang 2003. Two layers: Freund, Floro and Chason 1999.
+ * Sliding: own derivation.
  */
-export function solveLaminate(layersBottomToTop: readonly Layer[], o: { temperature?: number } = {}): LaminateResult {
+export function solveLaminate(layersBottomToTop: readonly Layer[], o: LaminateOptions = {}): LaminateResult {
   const named = layersBottomToTop.map((layer, n): NamedLayer => {
     const field = `layers[${n}]`;
     return { layer: checkLayer(layer, field), field };
   });
-  const layers = placeLayers(named, o.temperature ?? ROOM_TEMPERATURE);
-  const balance = balanceLayers(layers);
+  const temperature = o.temperature ?? ROOM_TEMPERATURE;
+  const layers = placeLayers(named, temperature);
+  const balance = balanceLayers(layers, o.slidingOn ? solveLaminate(o.slidingOn, { temperature }) : undefined);
   const stressAt = (l: PlacedLayer, z: number) =>
     l.biaxialModulus * (balance.midplaneStrain - balance.curvature * z - l.freeStrain);
   return {
@@ -58,8 +73,11 @@ export function solveLaminate(layersBottomToTop: readonly Layer[], o: { temperat
   };
 }
 
+/** A stack that takes the same curvature as another and slides on it. */
+export type SlidingPlate = Pick<LaminateBalance, "curvature" | "bendingStiffness" | "stretchingStiffness">;
+
 /** The part of `solveLaminate` that concerns the stack as a whole, for layers that are checked and placed already. */
-export function balanceLayers(layers: readonly PlacedLayer[]): LaminateBalance {
+export function balanceLayers(layers: readonly PlacedLayer[], slidingOn?: SlidingPlate): LaminateBalance {
   let stretching = 0;
   let firstMoment = 0;
   let force = 0;
@@ -81,12 +99,18 @@ export function balanceLayers(layers: readonly PlacedLayer[]): LaminateBalance {
     bendingStiffness += l.stiffness * ((l.thickness * l.thickness) / 12 + height * height);
     moment += l.stiffness * (l.freeStrain - meanStrain) * height;
   }
+  if (slidingOn) {
+    moment -= slidingOn.bendingStiffness * slidingOn.curvature;
+    bendingStiffness += slidingOn.bendingStiffness;
+    stretching += slidingOn.stretchingStiffness;
+  }
   const strainPerHeight = moment / bendingStiffness;
   return {
     curvature: strainPerHeight === 0 ? 0 : -strainPerHeight,
     midplaneStrain: meanStrain - strainPerHeight * neutralPlane,
     neutralPlane,
     bendingStiffness,
+    stretchingStiffness: stretching,
     effectiveThickness: Math.sqrt((12 * bendingStiffness) / stretching),
   };
 }

@@ -1,4 +1,5 @@
 import type { LyingShape } from "../flow/shape.ts";
+import type { LaminateOptions } from "../laminate/solve-laminate.ts";
 import { laminateWorking } from "../laminate/working.ts";
 import { freeWaferShapeWorking } from "../plate/working.ts";
 import type { Working } from "../working.ts";
@@ -7,6 +8,10 @@ import type { Working } from "../working.ts";
 export function warpWorking(shape: LyingShape): Working {
   return {
     ...freeWaferShapeWorking(shape.disc),
-    from: [laminateWorking(shape.layers, { temperature: shape.temperature })],
+    from: [laminateWorking(shape.layers, laminateOptions(shape))],
   };
+}
+
+function laminateOptions({ temperature, slidingOn }: LyingShape): LaminateOptions {
+  return slidingOn ? { temperature, slidingOn } : { temperature };
 }

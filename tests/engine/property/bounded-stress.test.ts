@@ -35,7 +35,7 @@ function solve(
     const layer = placed[n];
     return layer ? [{ layer, low: -low, high }] : [];
   });
-  const strains = flowStrains(placed, bounds, balanceLayers(placed), heldFlat) ?? bounds.map(() => 0);
+  const strains = flowStrains(placed, bounds, balanceLayers(placed), { heldFlat }) ?? bounds.map(() => 0);
   bounds.forEach(({ layer }, n) => letFlow(layer, strains[n] ?? 0));
   const balance = balanceLayers(placed);
   const stress = placed.map((l) => {
