@@ -2,6 +2,7 @@ import type { NamedLayer } from "../laminate/free-strain.ts";
 import { checkLayer, type Layer } from "../laminate/layer.ts";
 import { siliconPlateConstants, type PlateConstants } from "../silicon/plane-constants.ts";
 import type { Orientation } from "../silicon/orientation.ts";
+import { carrierExpansion } from "./carrier-expansion.ts";
 import type { FilmAddition } from "./model.ts";
 import { glassTransition, lockTemperature, type BondState } from "./bond.ts";
 import type { FilmState, WaferState } from "./state.ts";
@@ -89,7 +90,7 @@ function carrierEntry(bond: BondState): StackEntry {
       thickness: carrier.thickness.value,
       youngsModulus: carrier.youngsModulus.value,
       poissonsRatio: carrier.poissonsRatio.value,
-      cte: carrier.expansion === null ? "silicon" : carrier.expansion.value,
+      cte: carrierExpansion(carrier),
       referenceTemperature: lockTemperature(bond),
       plasticStrain: rest?.carrierStrain ?? 0,
     },

@@ -1,3 +1,4 @@
+import type { ExpansionCurve } from "../laminate/expansion-curve.ts";
 import type { Measured } from "../measured.ts";
 import type { Exposure, Holding, Side } from "../vocabulary.ts";
 
@@ -63,7 +64,12 @@ export interface FilmAddition {
 export const CARRIER_MATERIALS = ["silicon", "glass"] as const;
 export type CarrierMaterial = (typeof CARRIER_MATERIALS)[number];
 
-/** A carrier. `expansion` null means silicon's own curve. */
+/**
+ * A carrier. `expansion` null means silicon's own curve; a number is a mean, and `meanExpansionOver` (K) says between which
+ * temperatures. With `expansionCurve` the curve is integrated instead, and `expansion` only moves it as a whole: by how much
+ * its value lies above the mean of the curve over `meanExpansionOver`, by default the curve's own range, and its tolerance is the
+ * uncertainty of the whole curve.
+ */
 export interface CarrierInput {
   id: string;
   name: string;
@@ -73,6 +79,8 @@ export interface CarrierInput {
   youngsModulus: Measured;
   poissonsRatio: Measured;
   expansion: Measured | null;
+  meanExpansionOver?: { from: number; to: number } | null;
+  expansionCurve?: ExpansionCurve | null;
   temperatureLimit: Measured;
 }
 
