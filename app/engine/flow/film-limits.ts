@@ -1,6 +1,7 @@
 import { ROOM_TEMPERATURE } from "../laminate/layer.ts";
 import type { StressBound } from "../laminate/bounded-stress.ts";
 import type { PlacedLayer } from "../laminate/placed-layers.ts";
+import { yieldShare } from "./film-entry.ts";
 import type { FilmAddition } from "./model.ts";
 
 /** Yield stress falls linearly to zero this far above 25 °C, K (common practice, no source; trend of Thouless 1993, from memory). */
@@ -13,13 +14,17 @@ export function yieldStress(atRoom: number, temperature: number): number {
 
 /** Least and most mean stress that a film carries at a temperature (K), Pa; null for one that stays elastic. */
 export function stressBound(
-  { film }: FilmAddition,
+  addition: FilmAddition,
   layer: PlacedLayer,
   temperature: number,
   metalHistory: boolean,
 ): StressBound | null {
-  if (film.kind === "polymer") return { layer, low: 0, high: Infinity };
+  const { film } = addition;
+  if (film.kind === "polymer") {
+    const soft = temperature >= (film.zeroStressTemperature?.value ?? Infinity);
+    return { layer, low: 0, high: soft ? 0 : Infinity };
+  }
   if (film.kind !== "metal" || film.yieldStress === null || !metalHistory) return null;
-  const limit = yieldStress(film.yieldStress.value, temperature);
+  const limit = yieldStress(film.yieldStress.value, temperature) * yieldShare(addition);
   return { layer, low: -limit, high: limit };
 }

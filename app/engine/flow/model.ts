@@ -1,4 +1,5 @@
 import type { ExpansionCurve } from "../laminate/expansion-curve.ts";
+import type { FilmPattern } from "../patterned/pattern.ts";
 import type { Measured } from "../measured.ts";
 import type { Exposure, Holding, Side } from "../vocabulary.ts";
 
@@ -6,7 +7,7 @@ import type { Exposure, Holding, Side } from "../vocabulary.ts";
  * What a flow is made of, complete in itself: names, values and provenance are copied in, so a stored assessment can be
  * read for ever without the library it came from. SI units; temperatures in K.
  *
- * Left out in this version: incoming shape other than films, patterned lines, wafers of a lot, tape and clock limits.
+ * Left out in this version: wafers of a lot, tape and clock limits.
  */
 
 export const STEP_KINDS = [
@@ -49,9 +50,17 @@ export interface FilmInput {
   expansion: Measured;
   yieldStress: Measured | null;
   temperatureLimit: Measured | null;
+  /**
+   * Of a polymer: from here on it carries no stress, K; below, its stress falls in a straight line from that at 25 °C to zero
+   * here, on thick silicon. Without it the stress falls with the film's expansion until it is zero.
+   */
+  zeroStressTemperature?: Measured | null;
 }
 
-/** A film put down by a step. `stress` at 25 °C on a full-thickness monitor held flat, tension positive. */
+/**
+ * A film put down by a step. `stress` at 25 °C on a full-thickness monitor held flat, tension positive, of the film before it
+ * is cut into a pattern.
+ */
 export interface FilmAddition {
   side: Side;
   film: FilmInput;
@@ -59,6 +68,19 @@ export interface FilmAddition {
   stress: Measured;
   /** area fraction, 0 to 1 */
   coverage: number;
+  /** how it is cut, with its own coverage; without it the film bends both directions alike by its `coverage` */
+  pattern?: FilmPattern | null;
+}
+
+/**
+ * Shape that the wafer comes in with, flattened by nothing, gravity compensated. Curvatures are positive for a bowl, along x
+ * (the notch or flat, <110> on silicon (100)) and across it.
+ */
+export interface IncomingShape {
+  curvature: { x: Measured; y: Measured };
+  /** share of it, 0 to 1, that films on the device side cause, which grows as 1/h² when the wafer is thinned; the crystal's own
+   * stays. null when nobody knows: taken as film */
+  filmShare: Measured | null;
 }
 
 export const CARRIER_MATERIALS = ["silicon", "glass"] as const;
@@ -163,6 +185,12 @@ export interface StepInput {
 
 export interface FlowInput {
   name: string;
-  wafer: { name: string; diameter: number; orientation: "100" | "111"; thickness: Measured };
+  wafer: {
+    name: string;
+    diameter: number;
+    orientation: "100" | "111";
+    thickness: Measured;
+    incoming?: IncomingShape | null;
+  };
   steps: StepInput[];
 }

@@ -4,7 +4,8 @@ import { letFlow, placeLayers, type PlacedLayer } from "../laminate/placed-layer
 import { balanceLayers, type LaminateBalance } from "../laminate/solve-laminate.ts";
 import { stressBound } from "./film-limits.ts";
 import { locked, slides } from "./bond.ts";
-import { carrierPlate, layersOf, type LayerStack, type StackEntry } from "./layers.ts";
+import { carrierPlate, layersOf, type LayerStack } from "./layers.ts";
+import type { StackEntry } from "./stack-entry.ts";
 import type { FilmState, WaferState } from "./state.ts";
 
 /** A stack at a temperature, its layers at their heights with what they have flowed. */

@@ -4,7 +4,9 @@ import type { Orientation } from "../silicon/orientation.ts";
 import type { FaceUp, Holding, Side } from "../vocabulary.ts";
 import { ROOM_TEMPERATURE } from "../laminate/layer.ts";
 import type { BondState } from "./bond.ts";
-import { filmEntry, siliconEntries, type StackEntry } from "./layers.ts";
+import { filmEntry } from "./film-entry.ts";
+import { incomingParts, siliconEntries, type Incoming } from "./silicon.ts";
+import type { StackEntry } from "./stack-entry.ts";
 import type { FilmAddition, FlowInput, StepInput } from "./model.ts";
 
 /** A film as it is on the wafer, with what it has been through. */
@@ -22,6 +24,8 @@ export interface FilmState {
 export interface WaferState {
   orientation: Orientation;
   silicon: Measured;
+  /** shape that it came in with; null for one that came flat */
+  incoming: Incoming | null;
   /** its layers, checked */
   siliconEntries: StackEntry[];
   front: FilmState[];
@@ -43,10 +47,12 @@ export function initialState(flow: FlowInput): WaferState {
   if (!(flow.wafer.thickness.value > 0))
     throw new EngineInputError("wafer.thickness", "the silicon must have a thickness", "> 0 m");
   const { orientation, thickness } = flow.wafer;
+  const incoming = incomingParts(flow.wafer);
   return {
     orientation,
     silicon: thickness,
-    siliconEntries: siliconEntries(orientation, thickness.value, 0),
+    incoming,
+    siliconEntries: siliconEntries(orientation, thickness.value, 0, incoming),
     front: [],
     back: [],
     groundFaceForce: 0,
@@ -106,14 +112,17 @@ export function applyStep(before: WaferState, step: StepInput, field: string): W
       : step.kind === "debond"
         ? null
         : before.bond;
-  const { orientation } = before;
+  const { orientation, incoming } = before;
   const silicon = thinner && step.siliconAfter ? step.siliconAfter : before.silicon;
   const groundFaceForce = step.groundFaceForce?.value ?? before.groundFaceForce;
   const unchanged = silicon === before.silicon && groundFaceForce === before.groundFaceForce;
   return {
     orientation,
     silicon,
-    siliconEntries: unchanged ? before.siliconEntries : siliconEntries(orientation, silicon.value, groundFaceForce),
+    incoming,
+    siliconEntries: unchanged
+      ? before.siliconEntries
+      : siliconEntries(orientation, silicon.value, groundFaceForce, incoming),
     // A seed that is stripped and left only under the lines is one removal and one addition.
     front: add(remove(before.front, "front", step), "front", step),
     back: add(remove(before.back, "back", step), "back", step),
@@ -146,6 +155,7 @@ export function sameState(a: WaferState, b: WaferState): boolean {
     });
   return (
     a.silicon === b.silicon &&
+    sameIncoming(a.incoming, b.incoming) &&
     a.groundFaceForce === b.groundFaceForce &&
     sameBond(a.bond, b.bond) &&
     alike(a.front, b.front) &&
@@ -161,5 +171,15 @@ function sameBond(a: BondState | null, b: BondState | null): boolean {
     a?.bondTemperature === b?.bondTemperature &&
     a?.rest?.carrierStrain === b?.rest?.carrierStrain &&
     a?.rest?.adhesiveStrain === b?.rest?.adhesiveStrain
+  );
+}
+
+function sameIncoming(a: Incoming | null, b: Incoming | null): boolean {
+  return (
+    a?.thickness === b?.thickness &&
+    a?.film.x === b?.film.x &&
+    a?.film.y === b?.film.y &&
+    a?.crystal.x === b?.crystal.x &&
+    a?.crystal.y === b?.crystal.y
   );
 }

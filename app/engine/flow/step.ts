@@ -3,10 +3,11 @@ import { ROOM_TEMPERATURE } from "../laminate/layer.ts";
 import { balanceLayers } from "../laminate/solve-laminate.ts";
 import type { Holding } from "../vocabulary.ts";
 import { flowPoint, slides } from "./bond.ts";
-import { layersOf } from "./layers.ts";
+import { bendsUnequally, layersOf } from "./layers.ts";
 import type { FlowInput, StepInput } from "./model.ts";
 import { lockedState, placeStack, settle, statedLayers, type Settled, type SettleOptions } from "./settle.ts";
 import { lyingShape, type LyingShape } from "./shape.ts";
+import { unequalCurvature } from "./unequal.ts";
 import { applyStep, type WaferState } from "./state.ts";
 
 type Wafer = FlowInput["wafer"];
@@ -71,13 +72,20 @@ export function releasedShape(wafer: Wafer, { after, cold }: WalkedStep): LyingS
   const temperature = ROOM_TEMPERATURE;
   const stack = placeStack(layersOf(after, temperature, { carrier: false }), temperature);
   const solution = balanceLayers(stack.placed);
-  return lyingShape(wafer, { layers: () => statedLayers(stack), solution, temperature, bonded: false });
+  const unequal = bendsUnequally(after) ? unequalCurvature(stack, temperature, null) : undefined;
+  return lyingShape(wafer, { layers: () => statedLayers(stack), solution, temperature, bonded: false, unequal });
 }
 
 function settledShape(wafer: Wafer, settled: Settled, bonded: boolean): LyingShape {
-  const { solution, temperature } = settled;
-  const slidingOn = settled.slidingOn?.map(({ stated }) => stated);
-  return lyingShape(wafer, { layers: () => statedLayers(settled), solution, temperature, bonded, slidingOn });
+  const { solution, temperature, state } = settled;
+  return lyingShape(wafer, {
+    layers: () => statedLayers(settled),
+    solution,
+    temperature,
+    bonded,
+    slidingOn: settled.slidingOn?.map(({ stated }) => stated),
+    unequal: bendsUnequally(state) ? unequalCurvature(settled, temperature, settled.slidingOn) : undefined,
+  });
 }
 
 /** How errors name a step, by its index. */

@@ -18,6 +18,11 @@ export function unknowns(flow: FlowInput): Unknown[] {
     else found.set(key, { label, measured, places: [place] });
   };
   note("wafer", "Incoming silicon thickness", flow.wafer.thickness, "wafer", "thickness");
+  const { incoming } = flow.wafer;
+  const atWafer = ["wafer", "incoming"];
+  note("bow x", "Incoming curvature along x", incoming?.curvature.x, ...atWafer, "curvature", "x");
+  note("bow y", "Incoming curvature along y", incoming?.curvature.y, ...atWafer, "curvature", "y");
+  note("film share", "Film part of the incoming shape", incoming?.filmShare, ...atWafer, "filmShare");
   flow.steps.forEach((step, i) => {
     note(`silicon ${i}`, `Silicon after step ${i + 1}`, step.siliconAfter, "steps", i, "siliconAfter");
     note(`face ${i}`, `Ground face force, step ${i + 1}`, step.groundFaceForce, "steps", i, "groundFaceForce");

@@ -52,11 +52,12 @@ export function walkFlow(flow: FlowInput, limits: SiteLimits, options: WalkOptio
 }
 
 function describe(
-  { wafer }: FlowInput,
+  flow: FlowInput,
   limits: SiteLimits,
   place: Pick<StepState, "number" | "step" | "before">,
   walked: WalkedStep,
 ): StepState {
+  const { wafer } = flow;
   const { after, cold } = walked;
   const atRoom = roomShape(wafer, walked);
   return {
@@ -67,7 +68,7 @@ function describe(
     released: atRoom && !after.bond ? atRoom : releasedShape(wafer, walked),
     lies: shapeWord(atRoom, after.faceUp, limits.flatWithin.value),
     filmForce: filmForces(after),
-    remarks: stepRemarks(place.step, after),
+    remarks: stepRemarks(flow, place.number, place.step, after),
     filmStress: filmStresses(cold).map(({ film, stress }) => ({
       name: film.addition.film.name,
       side: film.addition.side,
@@ -81,11 +82,9 @@ function filmForces(state: WaferState): StepState["filmForce"] {
   const force = (side: "front" | "back") =>
     allFilms(state)
       .filter(({ addition }) => addition.side === side)
-      .reduce((sum, film) => {
-        const { addition, plasticStrain } = film;
-        const { youngsModulus, poissonsRatio } = addition.film;
-        const modulus = youngsModulus.value / (1 - poissonsRatio.value);
-        return sum + (addition.stress.value - modulus * plasticStrain) * addition.thickness.value * addition.coverage;
+      .reduce((sum, { entry, plasticStrain }) => {
+        const { stress, biaxialModulus, thickness, coverage } = entry.layer;
+        return sum + (stress - biaxialModulus * plasticStrain) * thickness * coverage;
       }, 0);
   return { front: force("front"), back: force("back") + state.groundFaceForce };
 }
