@@ -1,3 +1,4 @@
+import { ROOM_TEMPERATURE } from "../laminate/layer.ts";
 import type { SiteLimits } from "../rules/limits.ts";
 import type { ShapeWord } from "../vocabulary.ts";
 import type { FlowInput, StepInput } from "./model.ts";
@@ -24,7 +25,21 @@ export interface StepState {
   filmForce: { front: number; back: number };
   /** what the figures of this step rest on that nobody stated, a sentence each */
   remarks: string[];
-  filmStress: { name: string; side: "front" | "back"; stress: number }[];
+  filmStress: FilmHistory[];
+}
+
+/** A film after a step, at 25 °C, with what it has been through. */
+export interface FilmHistory {
+  name: string;
+  side: "front" | "back";
+  /** mean stress, Pa */
+  stress: number;
+  /** strain left by yielding, biaxial, tension positive */
+  plasticStrain: number;
+  /** hottest so far, K */
+  hottest: number;
+  /** whether it has been hot since it came, so that a stress measured before no longer holds for a metal */
+  state: "as deposited" | "after its hottest step";
 }
 
 export interface WalkOptions {
@@ -58,7 +73,7 @@ function describe(
   walked: WalkedStep,
 ): StepState {
   const { wafer } = flow;
-  const { after, cold } = walked;
+  const { after } = walked;
   const atRoom = roomShape(wafer, walked);
   return {
     ...place,
@@ -69,12 +84,25 @@ function describe(
     lies: shapeWord(atRoom, after.faceUp, limits.flatWithin.value),
     filmForce: filmForces(after),
     remarks: stepRemarks(flow, place.number, place.step, after),
-    filmStress: filmStresses(cold).map(({ film, stress }) => ({
-      name: film.addition.film.name,
-      side: film.addition.side,
-      stress,
-    })),
+    filmStress: filmHistories(walked),
   };
+}
+
+function filmHistories({ after, cold }: WalkedStep): FilmHistory[] {
+  const films = [...after.back.toReversed(), ...after.front];
+  return filmStresses(cold).map(({ stress }, n) => {
+    const film = films[n];
+    if (!film) throw new Error("a settled stack has the films of its state");
+    const { addition, plasticStrain, hottest } = film;
+    return {
+      name: addition.film.name,
+      side: addition.side,
+      stress,
+      plasticStrain,
+      hottest,
+      state: hottest > ROOM_TEMPERATURE ? "after its hottest step" : "as deposited",
+    };
+  });
 }
 
 /** Rigid-substrate force of each side's films as they are now: what they would pull with if the silicon were thick. */

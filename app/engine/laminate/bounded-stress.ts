@@ -46,7 +46,7 @@ export function flowStrains(
     mean: elastic.midplaneStrain - elastic.curvature * elastic.neutralPlane,
     perHeight: heldFlat ? 0 : -elastic.curvature,
   };
-  if (bounds.every((bound) => zoneOf(problem, bound, strain) === 0)) return null;
+  if (bounds.every((bound) => keepsLimits(problem, bound, strain))) return null;
   for (let step = 0; step < MOST_STEPS; step += 1) {
     const { target, settled } = newtonTarget(problem, strain);
     if (settled) {
@@ -67,6 +67,14 @@ function trialStress({ neutralPlane }: Problem, l: PlacedLayer, { mean, perHeigh
 
 function clip(stress: number, { low, high }: StressBound): number {
   return stress < low ? low : stress > high ? high : stress;
+}
+
+/** Share of a limit that counts as rounding, so that a layer left at its limit does not flow by the last digit. */
+const ROUNDING = 1e-12;
+
+function keepsLimits(problem: Problem, { layer, low, high }: StressBound, strain: PlaneStrain): boolean {
+  const stress = trialStress(problem, layer, strain);
+  return stress >= low - ROUNDING * Math.abs(low) && stress <= high + ROUNDING * Math.abs(high);
 }
 
 /** −1 and 1 for a layer that flows at its lower and upper limit, 0 for one that is elastic. */

@@ -100,3 +100,30 @@ describe("lines and islands", () => {
     expect(relative(islands(1).linearCurvature, bend(null, { coverage: 0.5 }).linearCurvature)).toBeLessThan(1e-4);
   });
 });
+
+describe("what a film has been through", () => {
+  const copper = film({
+    kind: "metal",
+    youngsModulus: exact(117e9),
+    poissonsRatio: exact(0.34),
+    expansion: exact(16.7e-6),
+    yieldStress: exact(200e6),
+  });
+  const plated = addition({ film: copper, thickness: exact(um(5)), stress: exact(10e6) });
+
+  it("is told after every step: hottest, strain left, and the stress that it comes back with", () => {
+    const heats = [
+      step({ adds: [plated] }),
+      step({ peakTemperature: celsius(225) }),
+      step({ peakTemperature: celsius(100) }),
+    ];
+    const [made, cured, warmed] = walkFlow(flow(heats), limits).steps.map(({ filmStress }) => filmStress[0]);
+    expect(made).toMatchObject({ state: "as deposited", plasticStrain: 0, hottest: celsius(25) });
+    expect(cured).toMatchObject({ state: "after its hottest step", hottest: celsius(225) });
+    // Plated near zero, it comes back from a cure in strong tension: shortened for good while hot.
+    expect(cured?.plasticStrain ?? 0).toBeLessThan(0);
+    expect(cured?.stress ?? 0).toBeGreaterThan(150e6);
+    expect(warmed?.hottest).toBe(celsius(225));
+    expect(relative(warmed?.plasticStrain ?? 0, cured?.plasticStrain ?? 1)).toBeLessThan(1e-12);
+  });
+});
