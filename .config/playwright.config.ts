@@ -2,7 +2,7 @@ import { defineConfig } from "@playwright/test";
 
 /**
  * Browser tests, against the production build that `npm test` serves: BASE_URL says where, DEMO_ACCOUNTS_FILE names the
- * JSON file of the demo accounts. The browser is Debian's.
+ * JSON file of the demo accounts, DATABASE_OWNER_URL is the way around its walls. The browser is Debian's.
  */
 export default defineConfig({
   testDir: "../tests/browser",

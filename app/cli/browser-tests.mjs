@@ -23,7 +23,7 @@ const databaseName = "planeward_browser";
  *
  * @param {import("./checks.mjs").Checks} checks
  * @param {{ folder: string, database: import("./database.mjs").Database, accountsFile: string }} options
- * @returns {Promise<{ port: number, logFile: string }>}
+ * @returns {Promise<{ port: number, logFile: string, ownerUrl: string }>}
  */
 async function serveForTests({ keeper, env }, { folder, database, accountsFile }) {
   const access = accessTo(database, databaseName);
@@ -32,7 +32,7 @@ async function serveForTests({ keeper, env }, { folder, database, accountsFile }
   const port = await freePort();
   const logFile = join(folder, "server.log");
   await serveBuild(keeper, { port, logFile, env: { ...env, DATABASE_URL: access.appUrl } });
-  return { port, logFile };
+  return { port, logFile, ownerUrl: access.ownerUrl };
 }
 
 /**
@@ -42,7 +42,7 @@ async function serveForTests({ keeper, env }, { folder, database, accountsFile }
  */
 async function runPlaywright(checks, { folder, database, filters }) {
   const accountsFile = join(folder, "demo-accounts.json");
-  const { port, logFile } = await serveForTests(checks, { folder, database, accountsFile });
+  const { port, logFile, ownerUrl } = await serveForTests(checks, { folder, database, accountsFile });
   const report = join(folder, "playwright.json");
   const home = join(folder, "home");
   mkdirSync(home);
@@ -52,6 +52,8 @@ async function runPlaywright(checks, { folder, database, filters }) {
       env: {
         BASE_URL: `http://${loopback}:${port}`,
         DEMO_ACCOUNTS_FILE: accountsFile,
+        // For what no page can set up, such as a program that nobody belongs to.
+        DATABASE_OWNER_URL: ownerUrl,
         PLAYWRIGHT_JSON_OUTPUT_FILE: report,
         // The browser writes into its user's home.
         HOME: home,

@@ -147,3 +147,34 @@ export { balancingFilm, leastThickness, mostFilm, type Balance, type FilmQuantit
 export { carrierExpansionFor, sagittaAfter, sagittasAfter } from "./inverse/flow-questions.ts";
 export { calibratePair, type Calibration, type CalibratedValue } from "./calibration/calibrate-pair.ts";
 export { withCalibration, type Calibrated, type PairMeasurement } from "./calibration/pair-model.ts";
+
+// Uncertainty: distributions, first order, Monte Carlo, lots
+export { spreadUncertainty, uncertainQuantity, type Spread, type UncertainQuantity } from "./uncertainty/quantity.ts";
+export type { Correlation } from "./uncertainty/correlation.ts";
+export type { BlockModel, ScalarModel } from "./uncertainty/model.ts";
+export {
+  firstOrderUncertainty,
+  type Budget,
+  type BudgetLine,
+  type FirstOrderInput,
+  type FirstOrderUncertainty,
+} from "./uncertainty/first-order.ts";
+export { firstOrderShare, type FirstOrderShare } from "./uncertainty/first-order-share.ts";
+export { inverseNormal, normalShareBelow } from "./uncertainty/random/inverse-normal.ts";
+export {
+  sampleUncertainty,
+  sampling,
+  type SamplingInput,
+  type SamplingProgress,
+} from "./uncertainty/sample-uncertainty.ts";
+export { SAMPLING_METHODS, type Chance, type SampledUncertainty, type SamplingMethod } from "./uncertainty/summary.ts";
+export { sampleSteps, stepsSampling, type StepsSamplingInput } from "./uncertainty/sample-steps.ts";
+export { lotSampling, lotShare, type LotInput, type LotShare } from "./uncertainty/lot.ts";
+export {
+  laminateInputNames,
+  laminateInputValues,
+  laminateModel,
+  type LaminateModel,
+} from "./uncertainty/laminate-model.ts";
+export { shapeCurve, type ShapeCurve } from "./uncertainty/shape-curve.ts";
+export { firstOrderWorking, lotShareWorking, sampledChanceWorking, sampledWorking } from "./uncertainty/working.ts";

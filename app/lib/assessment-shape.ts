@@ -1,21 +1,8 @@
-import type { BowShape } from "#app/components/drawings/bow-shape.ts";
 import { formatQuantity } from "#app/engine/units/format.ts";
 import type { Holding, ShapeWord } from "#app/engine/vocabulary.ts";
 import type { ShapeResult } from "#app/schemas/assessment-result.ts";
 import { micrometres } from "./assessment-figure.ts";
-
-/** How a wafer lies on the tool, as the bow line draws it; null is a wafer that tape or frame holds flat. */
-export function lyingAs(shape: ShapeResult | null): BowShape {
-  if (!shape) return { kind: "held" };
-  if (isRolled(shape)) return { kind: "rolled", radius: shape.rollRadius, edgesUp: shape.edgesUp };
-  // Drawn as it lies: with its edges up the centre is low, whichever side is up.
-  return { kind: "bowed", bow: shape.edgesUp ? -Math.abs(shape.bow) : Math.abs(shape.bow) };
-}
-
-/** A wafer that has rolled up has a radius and an edge lift, never a bow. */
-export function isRolled(shape: ShapeResult): shape is ShapeResult & { rollRadius: number } {
-  return shape.regime === "curled" && shape.rollRadius !== null;
-}
+import { isRolled } from "./lying-as.ts";
 
 /** What holds it, as the end of 'held flat by': 'film frame', 'grinding tape'. */
 export function heldFlat(holding: Holding): string {

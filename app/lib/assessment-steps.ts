@@ -1,12 +1,13 @@
 import type { BowShape } from "#app/components/drawings/bow-shape.ts";
-import type { StepKind } from "#app/engine/flow/model.ts";
 import type { Finding } from "#app/engine/rules/finding.ts";
 import type { FaceUp, Holding, Outcome, SupportClass } from "#app/engine/vocabulary.ts";
 import type { AssessmentResult, BondResult, StepResult } from "#app/schemas/assessment-result.ts";
 import { celsius, micrometres } from "./assessment-figure.ts";
 import { bySeverity, findingNote } from "./assessment-finding.ts";
-import { isRolled, lyingAs, shapeText } from "./assessment-shape.ts";
+import { shapeText } from "./assessment-shape.ts";
 import { formatBare, withoutUnit } from "./format-measured.ts";
+import { isRolled, lyingAs } from "./lying-as.ts";
+import { SHORT_STEP_NAMES } from "./step-names.ts";
 
 /** One step of an assessment for strip, table and list: numbers that are drawn in SI, numbers that are read as text. */
 export interface StepRow {
@@ -34,33 +35,6 @@ export interface StepRow {
   more: number;
 }
 
-/** Names of the kinds of step on the strip, at most 12 characters. */
-const SHORT_NAMES: Record<StepKind, string> = {
-  receive: "Receive",
-  measure: "Measure",
-  deposit: "Deposit",
-  cure: "Cure",
-  anneal: "Anneal",
-  pattern: "Pattern",
-  plate: "Plate",
-  reflow: "Reflow",
-  clean: "Clean",
-  "edge trim": "Edge trim",
-  "laminate tape": "Tape",
-  bond: "Bond",
-  grind: "Grind",
-  "stress relief": "Relieve",
-  polish: "Polish",
-  "via reveal": "Reveal",
-  "back-side film": "Back film",
-  "mount on frame": "Mount",
-  debond: "Debond",
-  dice: "Dice",
-  move: "Move",
-  store: "Store",
-  hold: "Hold",
-};
-
 const NONE = "–";
 
 /** All steps of a result, in order. */
@@ -80,7 +54,7 @@ function stepRow(step: StepResult, findings: Finding[], bond: BondResult | null)
   return {
     number: step.number,
     title: step.title,
-    shortName: SHORT_NAMES[step.kind],
+    shortName: SHORT_STEP_NAMES[step.kind],
     silicon: { thickness: step.silicon, text: formatBare(step.silicon, "length", "µm") },
     temperature: { peak: step.peakTemperature, text: withoutUnit(celsius(step.peakTemperature)) },
     bow: { shape: lyingAs(atRoom), deviceSideUp: isUp(faceUp), holding: planned },

@@ -10,7 +10,7 @@ import { celsius, figureText, micrometres } from "./assessment-figure.ts";
 import { bySeverity, figureWorkingPath } from "./assessment-finding.ts";
 import { assessmentNumber } from "./assessment-number.ts";
 import { selectedStep, stepAskedFor, type SelectedStep } from "./assessment-selected.ts";
-import { isRolled } from "./assessment-shape.ts";
+import { isRolled } from "./lying-as.ts";
 import { stepRows, type StepRow } from "./assessment-steps.ts";
 import { SITE_NAME } from "./site.ts";
 

@@ -1,4 +1,5 @@
 import type { LibraryRecords, LibraryUse } from "#app/schemas/library-records.ts";
+import type { RecordStamp } from "#app/schemas/record-stamp.ts";
 import type { KIND_KEYS, KindSlug } from "./library-kinds.ts";
 import type { ListPage } from "./list-params.ts";
 import type { PairTrial } from "./pair-trial.ts";
@@ -22,7 +23,7 @@ export type KindRecordData<Slug extends KindSlug = KindSlug> = {
   [S in Slug]: {
     slug: S;
     record: KindRecord<S>;
-    stamp: { version: number; updatedAt: string; updatedBy: string };
+    stamp: RecordStamp;
     mayEdit: boolean;
   };
 }[Slug];

@@ -2,7 +2,7 @@ import type { Finding } from "#app/engine/rules/finding.ts";
 import { outcomeRank, supportRank, type Holding } from "#app/engine/vocabulary.ts";
 import type { BondResult, StepResult } from "#app/schemas/assessment-result.ts";
 import { celsius } from "./assessment-figure.ts";
-import { isRolled } from "./assessment-shape.ts";
+import { isRolled } from "./lying-as.ts";
 import type { SheetGroup } from "./sheet-groups.ts";
 import { roundedRadius } from "./sheet-round.ts";
 import { stepsInWords } from "./step-numbers.ts";

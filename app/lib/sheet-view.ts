@@ -13,7 +13,7 @@ import {
 import type { AssessmentResult, BondResult, ShapeResult, StepResult } from "#app/schemas/assessment-result.ts";
 import { celsius } from "./assessment-figure.ts";
 import { assessmentNumber } from "./assessment-number.ts";
-import { isRolled, lyingAs } from "./assessment-shape.ts";
+import { isRolled, lyingAs } from "./lying-as.ts";
 import { sentenceCase } from "./assessment-steps.ts";
 import { titleBlock, type AssessmentHead } from "./assessment-view.ts";
 import { formatBare } from "./format-measured.ts";

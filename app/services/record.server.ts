@@ -6,6 +6,7 @@ import {
 } from "@mikro-orm/core";
 import { randomUUID } from "node:crypto";
 import type { Person } from "#app/db/entities/person.ts";
+import type { RecordStamp } from "#app/schemas/record-stamp.ts";
 import { notFound } from "#app/server/problem.server.ts";
 import type { ActorScope } from "#app/server/scope.server.ts";
 
@@ -54,13 +55,6 @@ export function newRecord(scope: ActorScope) {
 /** Marks a record as changed by the actor now, which also moves its version on. */
 export function touch(record: { updatedAt: Date }, scope: ActorScope): void {
   Object.assign(record, { updatedAt: new Date(), updatedBy: scope.actor.id });
-}
-
-/** Dates and names that a form shows about a record. */
-export interface RecordStamp {
-  version: number;
-  updatedAt: string;
-  updatedBy: string;
 }
 
 export function stampOf(record: {

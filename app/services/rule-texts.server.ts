@@ -1,8 +1,8 @@
-import type { RuleText } from "#app/components/method/RuleEntry.tsx";
 import { LIMIT_DEFINITIONS, type LimitDefinition, type LimitKey } from "#app/engine/rules/limits.ts";
 import { RULES } from "#app/engine/rules/rules.ts";
 import { formatQuantity } from "#app/engine/units/format.ts";
 import { mayOnSite } from "#app/policies/permissions.ts";
+import type { RuleText } from "#app/schemas/rule-text.ts";
 import type { ActorScope } from "#app/server/scope.server.ts";
 import { siteLimits } from "./limits.server.ts";
 

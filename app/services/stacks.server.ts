@@ -1,6 +1,5 @@
 import { randomUUID } from "node:crypto";
 import { raw, type EntityManager, type QueryOrderMap } from "@mikro-orm/postgresql";
-import type { StackListRow } from "#app/components/stacks/stack-columns.tsx";
 import { Film } from "#app/db/entities/film.ts";
 import { Silicon } from "#app/db/entities/silicon.ts";
 import { StackLayer } from "#app/db/entities/stack-layer.ts";
@@ -11,6 +10,8 @@ import { PAGE_SIZE, type ListPage, type ListParams } from "#app/lib/list-params.
 import { turnFront } from "#app/lib/stack-order.ts";
 import { mayInProgram, programsWhere, type ProgramPermission } from "#app/policies/permissions.ts";
 import type { EstimateRequest } from "#app/schemas/estimate.ts";
+import type { RecordStamp } from "#app/schemas/record-stamp.ts";
+import type { StackRow } from "#app/schemas/stack-row.ts";
 import type { StackValues } from "#app/schemas/stack.ts";
 import { notFound, problem } from "#app/server/problem.server.ts";
 import { inScope, type ActorScope } from "#app/server/scope.server.ts";
@@ -19,7 +20,7 @@ import { escapeLike } from "./like.server.ts";
 import { readLimits } from "./limits.server.ts";
 import { requireInProgram } from "./permission.server.ts";
 import { programFilter } from "./program-filter.server.ts";
-import { conflictOf, newRecord, saving, stampOf, touch, type RecordStamp, type Saved } from "./record.server.ts";
+import { conflictOf, newRecord, saving, stampOf, touch, type Saved } from "./record.server.ts";
 import { idFrom } from "./uuid.server.ts";
 
 export const STACK_SORTS = ["updated", "name", "program", "thickness"] as const;
@@ -136,7 +137,7 @@ const ORDERS: Record<(typeof STACK_SORTS)[number], (direction: "asc" | "desc") =
 export async function listStacks(
   scope: ActorScope,
   params: ListParams,
-): Promise<ListPage<StackListRow> & { flatWithin: number }> {
+): Promise<ListPage<StackRow> & { flatWithin: number }> {
   requireSomewhere(scope, "see the work");
   return inScope(scope, async (em) => {
     const order = ORDERS[STACK_SORTS.find((name) => name === params.sort) ?? "updated"];
@@ -158,7 +159,7 @@ export async function listStacks(
       stacks.map(({ id }) => id),
     );
     const limits = await readLimits(em);
-    const rows = stacks.map((stack): StackListRow => {
+    const rows = stacks.map((stack): StackRow => {
       const detail = detailOf(stack, layers.get(stack.id) ?? [], scope);
       return {
         id: stack.id,

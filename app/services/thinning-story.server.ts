@@ -1,7 +1,7 @@
-import type { ThinnedWafer } from "#app/components/sign-in/ThinningStory.tsx";
 import { estimateStack } from "#app/engine/stack/estimate-stack.ts";
 import type { StackInput } from "#app/engine/stack/model.ts";
 import { standardBow } from "#app/engine/stoney/bow.ts";
+import type { ThinnedWafer } from "#app/schemas/thinned-wafer.ts";
 
 /** Redistribution copper and polymer of no particular product: what any such stack does. */
 const STACK: StackInput = {

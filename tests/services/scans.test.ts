@@ -1,7 +1,7 @@
 import { readFileSync } from "node:fs";
 import { beforeAll, describe, expect, test } from "vitest";
 import type { ScanValues } from "#app/schemas/scan.ts";
-import { MONITOR_PARAMETERS, monitorProfile, profileCsv } from "#tests/fixtures/monitor-profile.ts";
+import { MONITOR_PARAMETERS, monitorProfile, profileCsv } from "#app/db/seeders/demo-monitor.ts";
 import { leave, scopeOfPerson } from "#tests/db/people.ts";
 import { asOwner, useDatabase } from "#tests/db/test-database.ts";
 

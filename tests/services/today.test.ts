@@ -5,10 +5,11 @@ import { asOwner, useDatabase } from "#tests/db/test-database.ts";
 const database = useDatabase({ demo: true });
 
 const today = () => import("#app/services/today.server.ts");
+const flows = () => import("#app/services/flows/new-flow.server.ts");
 const assessments = () => import("#app/services/assessments/assessments.server.ts");
 
 // Loading the server's modules takes longer than a test should.
-beforeAll(() => Promise.all([today(), assessments()]), 60_000);
+beforeAll(() => Promise.all([today(), flows(), assessments()]), 60_000);
 
 const TERN = "Tern T-2, to 100 µm on tape";
 
@@ -16,12 +17,22 @@ test("a flow goes from not assessed over clear to out of date, and to a decision
   const engineer = await scopeOfPerson(database, "engineer");
   const { todayView } = await today();
   const { runAssessment } = await assessments();
+  const delivered = await todayView(engineer);
+  expect([delivered.decisions.total, delivered.outOfDate.total, delivered.notAssessed.total]).toEqual([0, 0, 0]);
+  expect(delivered.scans).toMatchObject([{ label: "M-0388", film: "Polymer dielectric A" }]);
+
+  const { copyFlow } = await flows();
+  const [demo] = await asOwner<{ id: string }>(database, "select id from flow where name = ?", [TERN]);
+  await copyFlow(engineer, demo?.id ?? "");
   const before = await todayView(engineer);
-  expect(before.notAssessed).toMatchObject({ total: 1, rows: [{ name: TERN, program: "Tern", mayAssess: true }] });
+  expect(before.notAssessed).toMatchObject({
+    total: 1,
+    rows: [{ name: `${TERN}, copy`, program: "Tern", mayAssess: true }],
+  });
   expect(before.programs).toMatchObject([
     { name: "Fulmar", flows: 0, stacks: 1 },
     { name: "Petrel", flows: 0, stacks: 1 },
-    { name: "Tern", diameter: 0.2, flows: 1, stacks: 1 },
+    { name: "Tern", diameter: 0.2, flows: 2, stacks: 1 },
   ]);
 
   const flow = before.notAssessed.rows[0]?.id ?? "";

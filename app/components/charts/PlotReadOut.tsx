@@ -28,7 +28,7 @@ export function PlotReadOut({ plot, xName, at, frame, onRead }: PlotReadOutProps
   });
   const spoken = [plot.x.format(at), ...values.map(({ series, text }) => `${series.label} ${text}`)].join("; ");
   return (
-    <div className="min-h-14">
+    <div className="min-h-14 pt-1.5">
       <input
         type="range"
         className="plot-cursor block"

@@ -1,12 +1,13 @@
 import { LibraryDetail } from "#app/components/library/LibraryDetail.tsx";
 import { propertyRows } from "#app/components/library/property.ts";
 import type { LibraryRecords, LibraryUse } from "#app/schemas/library-records.ts";
+import type { RecordStamp } from "#app/schemas/record-stamp.ts";
 import { FILM_PROPERTIES } from "./film-properties.ts";
 import { filmAnswer, filmHistory } from "./film-words.ts";
 
 interface Props {
   record: LibraryRecords["film"];
-  stamp: { updatedAt: string; updatedBy: string };
+  stamp: RecordStamp;
   mayEdit: boolean;
   uses: LibraryUse[];
 }

@@ -1,18 +1,7 @@
 import { Link } from "react-router";
 import { FindingTag } from "#app/components/drawings/FindingTag.tsx";
 import { noBreak } from "#app/components/drawings/no-break.ts";
-import type { Outcome } from "#app/engine/vocabulary.ts";
-
-/** An assessment of the flow as a line of its history. */
-export interface FlowAssessmentRow {
-  id: string;
-  number: number;
-  outcome: Outcome;
-  sentences: string[];
-  createdAt: string;
-  createdBy: string;
-  outOfDate: boolean;
-}
+import type { FlowAssessmentRow } from "#app/schemas/flow-view.ts";
 
 /** What the newest assessment says of the flow, with the older ones beside it. The answer comes before the plan. */
 export function FlowAnswer({ assessments, mayAssess }: { assessments: FlowAssessmentRow[]; mayAssess: boolean }) {

@@ -1,34 +1,10 @@
 import { PropertyTable, type Property } from "#app/components/ui/PropertyTable.tsx";
 import type { Measured } from "#app/engine/measured.ts";
 import { formatQuantity } from "#app/engine/units/format.ts";
-import type { Exposure, Holding, Side } from "#app/engine/vocabulary.ts";
-
-interface Step {
-  kind: string;
-  peakTemperature: number;
-  holdTime: number | null;
-  equipment: { name: string } | null;
-  exposures: Exposure[];
-  planned: Holding;
-  siliconAfter: Measured | null;
-  trimWidth: Measured | null;
-  trimDepth: Measured | null;
-  carrier: { name: string } | null;
-  bondingMaterial: { name: string } | null;
-  bondThickness: Measured | null;
-  groundFaceForce: Measured | null;
-  films: {
-    change: "adds" | "removes";
-    side: Side;
-    film: { name: string };
-    thickness: Measured | null;
-    stress: Measured;
-    coverage: number;
-  }[];
-}
+import type { StepDetail } from "#app/schemas/flow-view.ts";
 
 /** A step for those who may not change it: everything of its form, to read. */
-export function StepReading({ step }: { step: Step }) {
+export function StepReading({ step }: { step: StepDetail }) {
   const words: [label: string, value: string | null][] = [
     ["Kind of step", step.kind],
     ["Peak temperature", formatQuantity(step.peakTemperature, "temperature", { unit: "°C" })],
@@ -58,12 +34,12 @@ export function StepReading({ step }: { step: Step }) {
   );
 }
 
-function filmWords({ change, side, film, coverage }: Step["films"][number]): [string, string] {
+function filmWords({ change, side, film, coverage }: StepDetail["films"][number]): [string, string] {
   const share = change === "adds" && coverage < 1 ? `, ${formatQuantity(coverage, "fraction", { unit: "%" })}` : "";
   return [`${change === "adds" ? "Adds" : "Removes"}, ${side === "front" ? "device" : "back"} side`, film.name + share];
 }
 
-function measuredOf(step: Step): Property[] {
+function measuredOf(step: StepDetail): Property[] {
   const length = (label: string, measured: Measured | null, unit = "µm"): Property => ({
     label,
     measured,

@@ -1,7 +1,7 @@
-import type { StepKind } from "#app/engine/flow/model.ts";
 import type { Measured } from "#app/engine/measured.ts";
-import type { Exposure, Holding, Side } from "#app/engine/vocabulary.ts";
+import type { Holding } from "#app/engine/vocabulary.ts";
 import { measuredText, quantityText } from "#app/lib/form-values.ts";
+import type { StepDetail } from "#app/schemas/flow-view.ts";
 import type { MeasuredText } from "../forms/MeasuredField.tsx";
 
 /** A film that a step adds or removes, as the text of its form. */
@@ -33,34 +33,9 @@ export type StepFormValues = {
   films: FilmChangeValues[];
 };
 
-interface Step {
-  title: string;
-  kind: StepKind;
-  peakTemperature: number;
-  holdTime: number | null;
-  equipment: { id: string } | null;
-  exposures: Exposure[];
-  planned: Holding;
-  siliconAfter: Measured | null;
-  trimWidth: Measured | null;
-  trimDepth: Measured | null;
-  carrier: { id: string } | null;
-  bondingMaterial: { id: string } | null;
-  bondThickness: Measured | null;
-  groundFaceForce: Measured | null;
-  films: {
-    change: "adds" | "removes";
-    side: Side;
-    film: { id: string };
-    thickness: Measured | null;
-    ownStress: Measured | null;
-    coverage: number;
-  }[];
-}
-
 const length = (measured: Measured | null, unit = "µm") => measuredText(measured, "length", { unit });
 
-export function stepFormValues(step: Step): StepFormValues {
+export function stepFormValues(step: StepDetail): StepFormValues {
   return {
     title: step.title,
     kind: step.kind,

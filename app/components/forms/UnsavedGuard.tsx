@@ -41,7 +41,7 @@ export function UnsavedGuard({ dirty }: { dirty: boolean }) {
           Stay here
         </button>
         <button type="button" className="btn btn-remove" onClick={() => blocker.proceed?.()}>
-          Leave it
+          Leave without saving
         </button>
       </div>
     </dialog>

@@ -1,5 +1,7 @@
-import { Form, Link, NavLink } from "react-router";
+import { useEffect, useRef } from "react";
+import { Form, Link, useLocation } from "react-router";
 import { Mark } from "#app/components/drawings/Mark.tsx";
+import { liesIn } from "#app/lib/current-place.ts";
 import type { Place } from "#app/policies/places.ts";
 
 interface Props {
@@ -9,12 +11,17 @@ interface Props {
 
 /** Mark, who am I, and the places in the order of the job. */
 export function TopBar({ person, places }: Props) {
+  const { pathname } = useLocation();
+  const row = useRef<HTMLElement>(null);
+  useEffect(() => {
+    if (row.current) showCurrent(row.current);
+  }, [pathname]);
   return (
     <header className="screen-only mx-auto max-w-page px-4 tablet:px-6">
       <a href="#main" className="btn btn-primary absolute top-2 left-2 z-10 -translate-y-20 focus:translate-y-0">
         Skip to content
       </a>
-      <div className="flex min-h-12 flex-wrap items-center gap-x-6 gap-y-1 py-1">
+      <div className="flex min-h-12 items-center gap-x-4 py-1 tablet:gap-x-6">
         <Link
           to="/"
           className="flex items-center gap-2 text-lead font-semibold no-underline"
@@ -23,30 +30,43 @@ export function TopBar({ person, places }: Props) {
           <Mark />
           <span>Planeward</span>
         </Link>
-        <p className="ml-auto text-quiet">
-          {person.name}, {person.role}
+        <p className="relative ml-auto min-w-0 truncate text-quiet">
+          {person.name}
+          <span className="max-tablet:sr-only">, {person.role}</span>
         </p>
         <Form method="post" action="/sign-out">
-          <button type="submit" className="link min-h-8 cursor-pointer">
+          <button type="submit" className="link min-h-8 cursor-pointer whitespace-nowrap">
             Sign out
           </button>
         </Form>
       </div>
-      <nav aria-label="Places" className="overflow-x-auto border-b border-ink">
+      <nav ref={row} aria-label="Places" className="overflow-x-auto border-b border-ink">
         <ul className="flex gap-7">
           {places.map(({ name, path }) => (
             <li key={path}>
-              <NavLink
+              <Link
                 to={path}
-                end={path === "/"}
-                className="block py-2 whitespace-nowrap text-quiet no-underline aria-[current=page]:border-b-4 aria-[current=page]:border-ink aria-[current=page]:pb-1 aria-[current=page]:font-semibold aria-[current=page]:text-ink"
+                aria-current={liesIn(path, pathname) ? "page" : undefined}
+                className="block py-2 whitespace-nowrap text-quiet no-underline aria-[current=page]:border-b-4 aria-[current=page]:border-ink aria-[current=page]:pb-1 aria-[current=page]:font-semibold aria-[current=page]:text-ink aria-[current=page]:[scroll-initial-target:nearest]"
               >
                 {name}
-              </NavLink>
+              </Link>
             </li>
           ))}
         </ul>
       </nav>
     </header>
   );
+}
+
+/** Room between the current place and the edge of the row, px. */
+const BESIDE = 16;
+
+/** Scrolls the row of places, and nothing but the row, until the current one is in it. */
+function showCurrent(row: HTMLElement): void {
+  const place = row.querySelector("[aria-current]")?.getBoundingClientRect();
+  if (!place) return;
+  const { left, right } = row.getBoundingClientRect();
+  if (place.left < left) row.scrollLeft -= left - place.left + BESIDE;
+  else if (place.right > right) row.scrollLeft += place.right - right + BESIDE;
 }

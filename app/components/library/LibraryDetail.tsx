@@ -4,6 +4,7 @@ import { noBreak } from "#app/components/drawings/no-break.ts";
 import { PageHead } from "#app/components/layout/PageHead.tsx";
 import { PropertyTable, type Property } from "#app/components/ui/PropertyTable.tsx";
 import type { LibraryUse } from "#app/schemas/library-records.ts";
+import type { RecordStamp } from "#app/schemas/record-stamp.ts";
 import { Facts, type Fact } from "./Facts.tsx";
 import { UsedIn } from "./UsedIn.tsx";
 
@@ -18,7 +19,7 @@ export interface RecordView {
 
 interface Props {
   record: { name: string; note: string };
-  stamp: { updatedAt: string; updatedBy: string };
+  stamp: RecordStamp;
   mayEdit: boolean;
   uses: LibraryUse[];
   crumbs: { name: string; path: string }[];

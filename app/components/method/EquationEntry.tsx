@@ -1,7 +1,8 @@
 import { noBreak } from "#app/components/drawings/no-break.ts";
 import type { Equation } from "#app/engine/equations.ts";
-import { SOURCES, type Source, type SourceId } from "#app/engine/sources.ts";
-import { FormulaText } from "./FormulaText.tsx";
+import { Formula } from "#app/components/working/Formula.tsx";
+import { FormulaLines } from "#app/components/working/FormulaLines.tsx";
+import { shortCitation } from "#app/lib/short-citation.ts";
 
 /** One equation of the engine: formula, symbols with units, where it holds, where it comes from. */
 export function EquationEntry({ id, equation }: { id: string; equation: Equation }) {
@@ -15,13 +16,7 @@ export function EquationEntry({ id, equation }: { id: string; equation: Equation
         <h4 id={anchor} className="scroll-mt-4 font-semibold">
           {equation.title}
         </h4>
-        <div className="my-1 overflow-x-auto py-1" tabIndex={0} role="region" aria-label={`Formula: ${equation.title}`}>
-          {linesOf(equation.formula).map((line) => (
-            <p key={line} className="text-lead whitespace-nowrap">
-              <FormulaText text={line} />
-            </p>
-          ))}
-        </div>
+        <FormulaLines title={equation.title} formula={equation.formula} />
         <p>
           <b>Holds:</b> <Prose text={equation.range} />
         </p>
@@ -35,7 +30,7 @@ export function EquationEntry({ id, equation }: { id: string; equation: Equation
             <span key={source}>
               {index > 0 && "; "}
               <a href={`#source-${source}`} className="link">
-                {shortName(source)}
+                {shortCitation(source)}
               </a>
             </span>
           ))}
@@ -45,7 +40,7 @@ export function EquationEntry({ id, equation }: { id: string; equation: Equation
         {equation.symbols.map(({ symbol, meaning, unit }) => (
           <div key={symbol} className="contents">
             <dt className="whitespace-nowrap">
-              <FormulaText text={symbol} />
+              <Formula text={symbol} />
             </dt>
             <dd className="text-quiet">
               <Prose text={unit === "1" ? meaning : `${meaning}, ${unit}`} />
@@ -59,17 +54,5 @@ export function EquationEntry({ id, equation }: { id: string; equation: Equation
 
 /** A sentence in which symbols stand as they do in a formula. */
 function Prose({ text }: { text: string }) {
-  return <FormulaText text={noBreak(text)} />;
-}
-
-/** A formula of several relations, one a line; a comma inside brackets parts nothing. */
-const linesOf = (formula: string) => formula.split(/, (?![^(]*\))/);
-
-/** Family names and year, as in running text. */
-function shortName(id: SourceId): string {
-  const { author, year, title, basis }: Source = SOURCES[id];
-  if (basis === "own derivation" || basis === "own computation") return basis;
-  if (id === "common-practice") return "common practice, no source";
-  if (year === null) return author === "SEMI" ? `SEMI ${title.slice(0, title.indexOf(","))}` : author;
-  return `${author.replace(/\b\p{L}\.(?:-?\p{L}\.)* ?/gu, "").trim()} ${year}`;
+  return <Formula text={noBreak(text)} />;
 }

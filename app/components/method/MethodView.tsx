@@ -12,11 +12,12 @@ import { PLATE } from "#app/engine/equations/plate.ts";
 import { SILICON } from "#app/engine/equations/silicon.ts";
 import { STRENGTH } from "#app/engine/equations/strength.ts";
 import { THIN_FILM } from "#app/engine/equations/thin-film.ts";
+import type { RuleText } from "#app/schemas/rule-text.ts";
 import { Bibliography } from "./Bibliography.tsx";
 import { EquationEntry } from "./EquationEntry.tsx";
 import { MethodSection } from "./MethodSection.tsx";
 import { CONVENTIONS, GLOSSARY, leftOut } from "./method-words.ts";
-import { RuleEntry, type RuleText } from "./RuleEntry.tsx";
+import { RuleEntry } from "./RuleEntry.tsx";
 import { TermList } from "./TermList.tsx";
 
 const GROUPS: readonly { id: string; title: string; equations: Record<string, Equation> }[] = [

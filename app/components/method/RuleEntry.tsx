@@ -1,19 +1,4 @@
-/** A limit of the site with the value that was delivered. Texts, so that the rules themselves stay out of the browser. */
-export interface RuleLimit {
-  title: string;
-  value: string;
-  /** null where the site kept the delivered one */
-  delivered: string | null;
-  source: string;
-}
-
-export interface RuleText {
-  number: number;
-  title: string;
-  asks: string;
-  /** null for guests, who see no values of the site */
-  limits: RuleLimit[] | null;
-}
+import type { RuleText } from "#app/schemas/rule-text.ts";
 
 /** One handling rule: what it asks and, for the staff, the limits that it holds things against. */
 export function RuleEntry({ rule }: { rule: RuleText }) {

@@ -6,23 +6,12 @@ import { DataTable, type Column } from "#app/components/ui/DataTable.tsx";
 import { EmptyState } from "#app/components/ui/EmptyState.tsx";
 import { ListHead } from "#app/components/ui/ListHead.tsx";
 import type { Option } from "#app/components/ui/SelectField.tsx";
-import { OUTCOMES, type Outcome } from "#app/engine/vocabulary.ts";
+import { OUTCOMES } from "#app/engine/vocabulary.ts";
 import { assessmentNumber } from "#app/lib/assessment-number.ts";
 import type { ListPage } from "#app/lib/list-params.ts";
+import type { AssessmentRow } from "#app/schemas/assessment-row.ts";
 
-interface Row {
-  id: string;
-  documentNumber: number;
-  flow: string;
-  program: string;
-  programSlug: string;
-  outcome: Outcome;
-  createdAt: string;
-  createdBy: string;
-  flowChanged: boolean;
-}
-
-const columns: Column<Row>[] = [
+const columns: Column<AssessmentRow>[] = [
   {
     key: "number",
     head: "Number",
@@ -60,7 +49,7 @@ const columns: Column<Row>[] = [
 const outcomeOptions = OUTCOMES.map((outcome) => ({ value: outcome, label: OUTCOME_SIGNS[outcome].word }));
 
 /** What can be printed: the newest assessment of each flow. A guest, who sees none of them, is told what will stand here. */
-export function SheetList({ page, programs }: { page: ListPage<Row> | null; programs: readonly Option[] }) {
+export function SheetList({ page, programs }: { page: ListPage<AssessmentRow> | null; programs: readonly Option[] }) {
   if (page === null)
     return (
       <>

@@ -1,17 +1,6 @@
 import { BowLine } from "#app/components/drawings/BowLine.tsx";
 import { formatQuantity } from "#app/engine/units/format.ts";
-import type { ShapeRegime } from "#app/engine/vocabulary.ts";
-
-/** One wafer of the drawing: the same films, less silicon. */
-export interface ThinnedWafer {
-  thickness: number;
-  diameter: number;
-  regime: ShapeRegime;
-  warp: number;
-  /** standard bow, for one that is not rolled */
-  bow: number;
-  rollRadius: number | null;
-}
+import type { ThinnedWafer } from "#app/schemas/thinned-wafer.ts";
 
 /** Drawn width of the flat wafer's box, px; the arcs keep its scale. */
 const WIDTH = 520;

@@ -18,7 +18,7 @@ import { StackCut } from "./StackCut.tsx";
 import { StackFindings } from "./StackFindings.tsx";
 import { StackHeadFields } from "./StackHeadFields.tsx";
 import { StackPanes } from "./StackPanes.tsx";
-import { UnsavedGuard } from "./UnsavedGuard.tsx";
+import { UnsavedGuard } from "#app/components/forms/UnsavedGuard.tsx";
 import { useLiveEstimate } from "./use-live-estimate.ts";
 import { useSelectedLayer } from "./use-selected-layer.ts";
 import { ViewOptions } from "./ViewOptions.tsx";

@@ -4,23 +4,11 @@ import { SupportTag } from "#app/components/drawings/SupportTag.tsx";
 import type { Column } from "#app/components/ui/DataTable.tsx";
 import { formatBare } from "#app/lib/format-measured.ts";
 import { shapeWords } from "#app/lib/stack-words.ts";
-import type { EstimateAnswer } from "#app/schemas/estimate.ts";
+import type { StackRow } from "#app/schemas/stack-row.ts";
 import { bowOf } from "./bow-of.ts";
 
-export interface StackListRow {
-  id: string;
-  name: string;
-  program: string;
-  diameter: number;
-  thickness: number;
-  films: number;
-  updatedAt: string;
-  updatedBy: string;
-  answer: EstimateAnswer | null;
-}
-
 /** Columns of the list of stacks. All bow lines share one exaggeration; rolled wafers are drawn at ×1, which their cell says. */
-export function stackColumns(exaggeration: number, flatWithin: number): Column<StackListRow>[] {
+export function stackColumns(exaggeration: number, flatWithin: number): Column<StackRow>[] {
   return [
     {
       key: "name",
@@ -98,7 +86,7 @@ export function stackColumns(exaggeration: number, flatWithin: number): Column<S
 }
 
 interface RowBowProps {
-  row: StackListRow;
+  row: StackRow;
   exaggeration: number;
   width: number;
   height: number;

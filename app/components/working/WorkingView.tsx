@@ -2,7 +2,9 @@ import { EQUATIONS, type Equation } from "#app/engine/equations.ts";
 import { citation, SOURCES, type SourceId } from "#app/engine/sources.ts";
 import type { Working, WorkingLine } from "#app/engine/working.ts";
 import { formatInUnit } from "#app/lib/format-unit.ts";
+import { shortCitation } from "#app/lib/short-citation.ts";
 import { Formula } from "./Formula.tsx";
+import { FormulaLines } from "./FormulaLines.tsx";
 
 const HEADINGS: Record<number, "h2" | "h3" | "h4" | "h5"> = { 2: "h2", 3: "h3", 4: "h4", 5: "h5" };
 
@@ -23,13 +25,7 @@ export function WorkingView({ working, level = 3 }: WorkingViewProps) {
   return (
     <section>
       <Heading className="font-semibold">{equation.title}</Heading>
-      <div className="mt-1 overflow-x-auto py-1" tabIndex={0} role="group" aria-label={`Formula: ${equation.title}`}>
-        {equation.formula.split(", ").map((part) => (
-          <p key={part} className="whitespace-nowrap text-lead">
-            <Formula text={part} />
-          </p>
-        ))}
-      </div>
+      <FormulaLines title={equation.title} formula={equation.formula} />
       <div className="overflow-x-auto" tabIndex={0} role="group" aria-label={`Figures: ${equation.title}`}>
         <table className="table">
           <caption className="sr-only">{equation.title}</caption>
@@ -53,9 +49,7 @@ export function WorkingView({ working, level = 3 }: WorkingViewProps) {
       <p className="mt-2 text-label text-quiet">
         <Formula text={[note, equation.range, equation.caution].filter(Boolean).join(" ")} />
       </p>
-      <p className="mt-1 text-label text-quiet">
-        Sources: {equation.sources.map((source) => shortCitation(source)).join("; ")}.
-      </p>
+      <p className="mt-1 text-label text-quiet">Sources: {equation.sources.map(shortCitation).join("; ")}.</p>
       {from.length > 0 && (
         <div className="mt-3 space-y-4 border-l border-edge pl-4">
           {from.map((part, index) => (
@@ -85,11 +79,3 @@ function Line({ line, result = false }: { line: WorkingLine; result?: boolean })
 
 /** A line's source is a key of the bibliography, or the provenance of an input in words. */
 const sourceWords = (source: string) => (source in SOURCES ? citation(source as SourceId) : source);
-
-/** Author and year, as in running text; the whole entry is on the method page. */
-function shortCitation(id: SourceId): string {
-  const { author, title, year, basis } = SOURCES[id];
-  if (basis === "own derivation" || basis === "own computation")
-    return `${basis}, ${title.charAt(0).toLowerCase()}${title.slice(1)}`;
-  return year === null ? `${author}, ${title}` : `${author} ${year}`;
-}

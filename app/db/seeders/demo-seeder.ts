@@ -7,8 +7,10 @@ import { Membership } from "../entities/membership.ts";
 import { Person } from "../entities/person.ts";
 import { Program } from "../entities/program.ts";
 import { DEMO_PEOPLE } from "./demo-accounts.ts";
+import { addDemoAssessment } from "./demo-assessment.ts";
 import { addDemoFlow } from "./demo-flow.ts";
 import { addDemoLibrary } from "./demo-library.ts";
+import { addDemoScan } from "./demo-scan.ts";
 import { addDemoStack, DEMO_STACKS } from "./demo-stacks.ts";
 
 const PROGRAMS = [
@@ -17,7 +19,7 @@ const PROGRAMS = [
   { name: "Fulmar", slug: "fulmar", diameter: 0.3, purpose: "Stacked device with through-silicon vias, to 20 µm" },
 ];
 
-/** The invented pilot line: people, library, three programs, the Tern flow whole and a stack for each program. */
+/** The invented pilot line: people, library, three programs, the Tern flow whole and assessed, a stack for each program and a scan. */
 export class DemoSeeder extends Seeder {
   override async run(em: EntityManager): Promise<void> {
     noteScope(em, { personId: null, requestId: "demo data" });
@@ -38,6 +40,13 @@ export class DemoSeeder extends Seeder {
     }
     const tern = programs.find(({ slug }) => slug === "tern");
     if (tern) await addDemoFlow(em, tern, films);
+    await em.flush();
+
+    // Read back as the server would read it, so that what is stored is what a person's own run would store.
+    em.clear();
+    const who = (account: string) => em.findOneOrFail(Person, { email: account });
+    await addDemoAssessment(em, await who("engineer@kestrel-ridge.example"));
+    await addDemoScan(em, await who("technician@kestrel-ridge.example"));
     await em.flush();
   }
 }

@@ -41,4 +41,41 @@ export const METROLOGY = {
     caution:
       "A tolerance is the half-width of the interval believed to hold the value: its standard uncertainty is tolerance/sqrt(3).",
   },
+  "monte-carlo-uncertainty": {
+    title: "Standard uncertainty and probability by Monte Carlo",
+    formula: "u^2 = Σ (f_k − f_m)^2 / (N − 1), P = N_L / N",
+    symbols: [
+      { symbol: "u", meaning: "standard uncertainty of the figure, in its own unit", unit: "1" },
+      { symbol: "f_k", meaning: "figure for draw k of all inputs, in its own unit", unit: "1" },
+      { symbol: "f_m", meaning: "mean of the draws", unit: "1" },
+      { symbol: "N", meaning: "number of draws", unit: "1" },
+      { symbol: "P", meaning: "probability that the figure is beyond the limit L", unit: "1" },
+      { symbol: "N_L", meaning: "draws whose figure is beyond L", unit: "1" },
+    ],
+    range: "Any model that can be computed for every draw. The standard errors of mean and P say what N leaves open.",
+    sources: [
+      "gum-supplement-1-2008",
+      "blackman-vigna-2021",
+      "marsaglia-tsang-2000",
+      "wichura-1988",
+      "cranley-patterson-1976",
+      "cools-kuo-nuyens-2006",
+      "sampling-layers",
+    ],
+    caution: "It is as good as the distributions of the inputs; a tolerance alone is taken as rectangular.",
+  },
+  "lot-share": {
+    title: "Share of a lot's wafers beyond a limit",
+    formula: "P(c) = share of w with f(c, w) > L, u^2(P) = var of P(c) over c",
+    symbols: [
+      { symbol: "P", meaning: "share of wafers beyond the limit", unit: "1" },
+      { symbol: "c", meaning: "what is common to all wafers of the lot", unit: "1" },
+      { symbol: "w", meaning: "what differs from wafer to wafer", unit: "1" },
+      { symbol: "f", meaning: "figure of one wafer, in its own unit", unit: "1" },
+      { symbol: "L", meaning: "limit of the figure", unit: "1" },
+    ],
+    range: "Wafers of one lot differ independently of each other; the lot's common part is not known exactly.",
+    sources: ["gum-supplement-1-2008", "sampling-layers"],
+    caution: "A tolerance that is common to the lot moves all its wafers together and does not spread them.",
+  },
 } as const satisfies Record<string, Equation>;

@@ -1,5 +1,6 @@
 import type { AssessedStep, FlowAssessment } from "./assess.ts";
 import type { FlowInput } from "./model.ts";
+import { inSentence } from "../in-sentence.ts";
 import { supportRank, type SupportClass } from "../vocabulary.ts";
 
 /** Steps in a row that need the same support, by number. */
@@ -58,7 +59,7 @@ function supportSentence(flow: FlowInput, { steps, verdict }: FlowAssessment): s
     verdict.outcome === "clear" ? "Clear as planned: " : verdict.outcome === "caution" ? "Runs with cautions: " : "";
   if (spans.length === 0) return finish(opening, planned ? "no step needs support" : "No step needs support");
   const parts = spans.map(({ support, from, to }) => {
-    const title = lowerFirst(flow.steps[from - 1]?.title ?? "");
+    const title = inSentence(flow.steps[from - 1]?.title ?? "");
     return from === to
       ? `${support} at step ${from}, ${title}`
       : `${support} from step ${from}, ${title}, to step ${to}`;
@@ -67,12 +68,10 @@ function supportSentence(flow: FlowInput, { steps, verdict }: FlowAssessment): s
   return finish(opening, opening || strongest ? parts.join("; ") : `Needs ${parts.join("; ")}`);
 }
 
-const lowerFirst = (text: string) => text.charAt(0).toLowerCase() + text.slice(1);
-
 const finish = (opening: string, rest: string) => `${opening}${rest}.`;
 
 function tightestSentence(assessment: FlowAssessment): string | null {
   const tightest = tightestStep(assessment);
   if (!tightest) return null;
-  return `Tightest: step ${tightest.step}, ${lowerFirst(tightest.reason)}`;
+  return `Tightest: step ${tightest.step}, ${inSentence(tightest.reason)}`;
 }

@@ -6,7 +6,9 @@ export interface PlacedLayer {
   thickness: number;
   /** Pa */
   biaxialModulus: number;
-  /** Biaxial modulus times thickness times coverage, N/m. */
+  /** Biaxial modulus times area fraction, Pa. */
+  coveredModulus: number;
+  /** The same times thickness, N/m. */
   stiffness: number;
   /** Height of the layer's middle over the mid-plane of the stack, m. */
   centre: number;
@@ -29,7 +31,8 @@ export function placeLayers(layersBottomToTop: readonly NamedLayer[], temperatur
     return {
       thickness,
       biaxialModulus,
-      stiffness: biaxialModulus * thickness * coverage,
+      coveredModulus: biaxialModulus * coverage,
+      stiffness: biaxialModulus * coverage * thickness,
       centre,
       freeStrain: freeStrain(entry, base, temperature),
       flowed: 0,

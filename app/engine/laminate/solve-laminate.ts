@@ -1,7 +1,18 @@
 import { EngineInputError } from "../errors.ts";
 import type { NamedLayer } from "./free-strain.ts";
 import { checkLayer, ROOM_TEMPERATURE, type Layer } from "./layer.ts";
+import {
+  bendingStiffnessOf,
+  LAMINATE_SUMS,
+  laminateSums,
+  meanStrainOf,
+  neutralPlaneOf,
+  strainPerHeightOf,
+  stretchingOf,
+} from "./laminate-sums.ts";
 import { placeLayers, type PlacedLayer } from "./placed-layers.ts";
+
+export { findBase } from "./placed-layers.ts";
 
 /** How a stack bends and stretches as a whole. */
 export interface LaminateBalance {
@@ -78,33 +89,12 @@ export type SlidingPlate = Pick<LaminateBalance, "curvature" | "bendingStiffness
 
 /** The part of `solveLaminate` that concerns the stack as a whole, for layers that are checked and placed already. */
 export function balanceLayers(layers: readonly PlacedLayer[], slidingOn?: SlidingPlate): LaminateBalance {
-  let stretching = 0;
-  let firstMoment = 0;
-  let force = 0;
-  for (const l of layers) {
-    stretching += l.stiffness;
-    firstMoment += l.stiffness * l.centre;
-    force += l.stiffness * l.freeStrain;
-  }
-  if (!(stretching > 0)) {
-    throw new EngineInputError("layers", "no layer covers any area, so the stack has no stiffness");
-  }
-  const neutralPlane = firstMoment / stretching;
-  const meanStrain = force / stretching;
-  // Taken about the neutral plane and against the mean strain, so that nothing large cancels for a thin film on a wafer.
-  let bendingStiffness = 0;
-  let moment = 0;
-  for (const l of layers) {
-    const height = l.centre - neutralPlane;
-    bendingStiffness += l.stiffness * ((l.thickness * l.thickness) / 12 + height * height);
-    moment += l.stiffness * (l.freeStrain - meanStrain) * height;
-  }
-  if (slidingOn) {
-    moment -= slidingOn.bendingStiffness * slidingOn.curvature;
-    bendingStiffness += slidingOn.bendingStiffness;
-    stretching += slidingOn.stretchingStiffness;
-  }
-  const strainPerHeight = moment / bendingStiffness;
+  const { neutralPlane, meanStrain, ...alone } = bend(layers);
+  const moment =
+    alone.strainPerHeight * alone.bendingStiffness - (slidingOn ? slidingOn.bendingStiffness * slidingOn.curvature : 0);
+  const bendingStiffness = alone.bendingStiffness + (slidingOn?.bendingStiffness ?? 0);
+  const stretching = alone.stretching + (slidingOn?.stretchingStiffness ?? 0);
+  const strainPerHeight = slidingOn ? moment / bendingStiffness : alone.strainPerHeight;
   return {
     curvature: strainPerHeight === 0 ? 0 : -strainPerHeight,
     midplaneStrain: meanStrain - strainPerHeight * neutralPlane,
@@ -112,5 +102,35 @@ export function balanceLayers(layers: readonly PlacedLayer[], slidingOn?: Slidin
     bendingStiffness,
     stretchingStiffness: stretching,
     effectiveThickness: Math.sqrt((12 * bendingStiffness) / stretching),
+  };
+}
+
+/**
+ * Sums through the stack taken twice: about the mid-plane to find the neutral plane and the mean strain, then about those, so
+ * that nothing large cancels for a thin film on a wafer.
+ */
+function bend(layers: readonly PlacedLayer[]) {
+  const thickness = Float64Array.from(layers, (l) => l.thickness);
+  const modulus = Float64Array.from(layers, (l) => l.coveredModulus);
+  const bottom = -layers.reduce((total, l) => total + l.thickness, 0) / 2;
+  const sums = new Float64Array(LAMINATE_SUMS);
+  const sumAbout = (plane: number, strain: number) => {
+    const pressure = Float64Array.from(layers, (l) => l.coveredModulus * (l.freeStrain - strain));
+    laminateSums(layers.length, thickness, 0, modulus, pressure, bottom - plane, sums);
+  };
+  sumAbout(0, 0);
+  const stretching = stretchingOf(sums);
+  if (!(stretching > 0)) {
+    throw new EngineInputError("layers", "no layer covers any area, so the stack has no stiffness");
+  }
+  const neutralPlane = neutralPlaneOf(sums);
+  const meanStrain = meanStrainOf(sums);
+  sumAbout(neutralPlane, meanStrain);
+  return {
+    stretching,
+    neutralPlane,
+    meanStrain,
+    bendingStiffness: bendingStiffnessOf(sums),
+    strainPerHeight: strainPerHeightOf(sums),
   };
 }

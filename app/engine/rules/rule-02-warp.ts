@@ -3,6 +3,7 @@ import { edgesUp, type LyingShape } from "../flow/shape.ts";
 import type { StepState } from "../flow/walk.ts";
 import { standardBow } from "../stoney/bow.ts";
 import { formatQuantity, formatWithUncertainty } from "../units/format.ts";
+import { inSentence } from "../in-sentence.ts";
 import type { FaceUp, Outcome } from "../vocabulary.ts";
 import { outcomeRank } from "../vocabulary.ts";
 import { againstUpperLimit, exceeds } from "./against-limit.ts";
@@ -123,9 +124,9 @@ function judgeMoment(
     return {
       ...found,
       outcome: "cannot judge",
-      reason: `${lies} ${when}; ${equipment.name} has no warp limit for ${direction}.`,
+      reason: `${lies} ${when}; ${inSentence(equipment.name)} has no warp limit for ${direction}.`,
       limit: null,
-      remedy: `Give ${equipment.name} its limit, or choose another tool.`,
+      remedy: `Give ${inSentence(equipment.name)} its limit, or choose another tool.`,
     };
   const margin = limit.value * limits.warpMargin.value;
   const outcome: Outcome = againstUpperLimit(shape.warp, limit.value, margin, "do not run");
@@ -133,7 +134,7 @@ function judgeMoment(
   return {
     ...found,
     outcome,
-    reason: `${lies} ${when}; ${equipment.name} takes ${um(limit.value)} ${direction}.${share ? ` ${share}` : ""}`,
+    reason: `${lies} ${when}; ${inSentence(equipment.name)} takes ${um(limit.value)} ${direction}.${share ? ` ${share}` : ""}`,
     limit: { label: `${equipment.name}, ${direction}`, value: limit.value, unit: "m", source: provenance(limit) },
     remedy:
       outcome === "clear"

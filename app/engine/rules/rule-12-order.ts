@@ -1,5 +1,6 @@
 import type { StepState } from "../flow/walk.ts";
 import { allFilms } from "../flow/state.ts";
+import { inSentence } from "../in-sentence.ts";
 import { formatQuantity } from "../units/format.ts";
 import type { Outcome } from "../vocabulary.ts";
 import { againstUpperLimit, exceeds } from "./against-limit.ts";
@@ -148,12 +149,12 @@ const doesNotFitTool: Check = ({ step, after }, { flow }) => {
   const carrier = after.bond?.carrier;
   if (carrier && exceeds(carrier.diameter, most))
     return {
-      reason: `${carrier.name} measures ${mm(carrier.diameter)}; ${step.equipment.name} takes ${mm(most)}.`,
+      reason: `${carrier.name} measures ${mm(carrier.diameter)}; ${inSentence(step.equipment.name)} takes ${mm(most)}.`,
       remedy: "Choose a carrier or a tool of the same size.",
     };
   if (exceeds(flow.wafer.diameter, most))
     return {
-      reason: `The wafer measures ${mm(flow.wafer.diameter)}; ${step.equipment.name} takes ${mm(most)}.`,
+      reason: `The wafer measures ${mm(flow.wafer.diameter)}; ${inSentence(step.equipment.name)} takes ${mm(most)}.`,
       remedy: "Choose a tool for this wafer size.",
     };
   return null;

@@ -1,25 +1,14 @@
 import { raw, type QueryOrderMap } from "@mikro-orm/postgresql";
 import { Assessment } from "#app/db/entities/assessment.ts";
-import { OUTCOMES, type Outcome } from "#app/engine/vocabulary.ts";
+import { OUTCOMES } from "#app/engine/vocabulary.ts";
 import { PAGE_SIZE, type ListPage, type ListParams } from "#app/lib/list-params.ts";
+import type { AssessmentRow } from "#app/schemas/assessment-row.ts";
 import { inScope, type ActorScope } from "#app/server/scope.server.ts";
 import { escapeLike } from "../like.server.ts";
+import { requireInSomeProgram } from "../permission.server.ts";
 import { programFilter } from "../program-filter.server.ts";
 
 export const ASSESSMENT_SORTS = ["run", "flow", "outcome"] as const;
-
-export interface AssessmentRow {
-  id: string;
-  documentNumber: number;
-  flow: string;
-  program: string;
-  programSlug: string;
-  outcome: Outcome;
-  createdAt: string;
-  createdBy: string;
-  /** the flow itself has been changed since */
-  flowChanged: boolean;
-}
 
 /** What a list shows: results are long, and it needs nothing of them. */
 const LISTED = [
@@ -36,6 +25,7 @@ const LISTED = [
 
 /** A page of the newest assessment of each flow that the person may see: those that a sheet would be printed from. */
 export async function listNewestAssessments(scope: ActorScope, params: ListParams): Promise<ListPage<AssessmentRow>> {
+  requireInSomeProgram(scope, "see the work");
   return inScope(scope, async (em) => {
     const newest = await em.execute<{ id: string }[]>(
       "select distinct on (flow_id) id from assessment order by flow_id, number desc",

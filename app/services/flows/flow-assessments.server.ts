@@ -1,20 +1,9 @@
-import { createHash } from "node:crypto";
 import type { EntityManager } from "@mikro-orm/postgresql";
 import type { Outcome } from "#app/engine/vocabulary.ts";
+import type { FlowAssessmentRow, FlowDetail } from "#app/schemas/flow-view.ts";
+import { inputHash } from "../assessments/input-hash.server.ts";
 import { readLimits } from "../limits.server.ts";
-import { flowInputOf, type FlowDetail } from "./flow-detail.ts";
-
-/** An assessment of a flow as a line of its history. */
-export interface FlowAssessmentRow {
-  id: string;
-  number: number;
-  outcome: Outcome;
-  sentences: string[];
-  createdAt: string;
-  createdBy: string;
-  /** the flow, or something that it uses, has been changed since */
-  outOfDate: boolean;
-}
+import { flowInputOf } from "./flow-inputs.ts";
 
 interface Row {
   id: string;
@@ -40,8 +29,7 @@ export async function flowAssessments(em: EntityManager, flow: FlowDetail): Prom
     [flow.id],
   );
   if (rows.length === 0) return [];
-  const now = { flow: flowInputOf(flow), limits: await readLimits(em) };
-  const hash = createHash("sha256").update(JSON.stringify(now)).digest("hex");
+  const hash = inputHash({ flow: flowInputOf(flow), limits: await readLimits(em) });
   return rows.map((row) => ({
     id: row.id,
     number: row.number,

@@ -2,9 +2,17 @@ import type { BondingMaterial } from "#app/db/entities/bonding-material.ts";
 import type { Carrier } from "#app/db/entities/carrier.ts";
 import type { Equipment } from "#app/db/entities/equipment.ts";
 import type { Film } from "#app/db/entities/film.ts";
-import type { BondingMaterialInput, CarrierInput, EquipmentInput, FilmInput } from "#app/engine/flow/model.ts";
+import type {
+  BondingMaterialInput,
+  CarrierInput,
+  EquipmentInput,
+  FilmInput,
+  FlowInput,
+  StepInput,
+} from "#app/engine/flow/model.ts";
+import type { FlowDetail, StepDetail } from "#app/schemas/flow-view.ts";
 
-/** Library entities as the engine takes them: plain, with the columns that it knows. */
+/** Flows and library entities as the engine takes them: plain, with the columns that it knows. */
 
 export function filmInput({ id, name, kind, ...film }: Film): FilmInput {
   return {
@@ -59,5 +67,41 @@ export function equipmentInput({ id, name, ...tool }: Equipment): EquipmentInput
     leastUnsupportedThickness: tool.leastUnsupportedThickness ?? null,
     atPeak: tool.atPeak,
     largestDiameter: tool.largestDiameter,
+  };
+}
+
+/** The flow as the engine takes it, complete in itself. */
+export function flowInputOf(flow: Pick<FlowDetail, "name" | "silicon" | "incomingThickness" | "steps">): FlowInput {
+  const { name, diameter, orientation } = flow.silicon;
+  return {
+    name: flow.name,
+    wafer: { name, diameter, orientation, thickness: flow.incomingThickness },
+    steps: flow.steps.map(stepInputOf),
+  };
+}
+
+function stepInputOf(step: StepDetail): StepInput {
+  const { carrier, bondingMaterial, bondThickness, trimWidth, trimDepth } = step;
+  return {
+    kind: step.kind,
+    title: step.title,
+    peakTemperature: step.peakTemperature,
+    holdTime: step.holdTime,
+    equipment: step.equipment,
+    exposures: step.exposures,
+    planned: step.planned,
+    siliconAfter: step.siliconAfter,
+    adds: step.films.flatMap(({ change, side, film, thickness, stress, coverage }) =>
+      change === "adds" && thickness ? [{ side, film, thickness, stress, coverage }] : [],
+    ),
+    removes: step.films.flatMap(({ change, side, film }) =>
+      change === "removes" ? [{ side, filmId: film.id, filmName: film.name }] : [],
+    ),
+    edgeTrim: step.kind === "edge trim" && trimWidth && trimDepth ? { width: trimWidth, depth: trimDepth } : null,
+    bond:
+      step.kind === "bond" && carrier && bondingMaterial && bondThickness
+        ? { carrier, material: bondingMaterial, thickness: bondThickness }
+        : null,
+    groundFaceForce: step.groundFaceForce,
   };
 }

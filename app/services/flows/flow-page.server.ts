@@ -1,10 +1,11 @@
 import type { Measured } from "#app/engine/measured.ts";
 import { planColumns } from "#app/lib/flow-plan.ts";
 import { stepRows, type StepRow } from "#app/lib/flow-rows.ts";
+import type { FlowAssessmentRow } from "#app/schemas/flow-view.ts";
+import type { RecordStamp } from "#app/schemas/record-stamp.ts";
 import { inScope, type ActorScope } from "#app/server/scope.server.ts";
-import type { RecordStamp } from "../record.server.ts";
 import { idFrom } from "../uuid.server.ts";
-import { flowAssessments, type FlowAssessmentRow } from "./flow-assessments.server.ts";
+import { flowAssessments } from "./flow-assessments.server.ts";
 import { readFlow } from "./read-flow.server.ts";
 
 /** A flow as its page shows it: text, not the materials behind it. */

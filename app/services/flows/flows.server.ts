@@ -2,8 +2,8 @@ import { Assessment } from "#app/db/entities/assessment.ts";
 import { FlowStep } from "#app/db/entities/flow-step.ts";
 import { Flow } from "#app/db/entities/flow.ts";
 import { Silicon } from "#app/db/entities/silicon.ts";
-import type { Outcome } from "#app/engine/vocabulary.ts";
 import { PAGE_SIZE, type ListPage, type ListParams } from "#app/lib/list-params.ts";
+import type { FlowDetail, FlowRow } from "#app/schemas/flow-view.ts";
 import type { FlowValues } from "#app/schemas/flow.ts";
 import { notFound, problem } from "#app/server/problem.server.ts";
 import { inScope, type ActorScope } from "#app/server/scope.server.ts";
@@ -12,20 +12,9 @@ import { requireInProgram, requireInSomeProgram } from "../permission.server.ts"
 import { programFilter } from "../program-filter.server.ts";
 import { conflictOf, saving, touch, type Saved } from "../record.server.ts";
 import { idFrom } from "../uuid.server.ts";
-import type { FlowDetail } from "./flow-detail.ts";
 import { findFlow, readFlow } from "./read-flow.server.ts";
 
 export const FLOW_SORTS = ["updated", "name", "program", "diameter"] as const;
-
-export interface FlowRow {
-  id: string;
-  name: string;
-  program: string;
-  diameter: number;
-  steps: number;
-  updatedAt: string;
-  latest: { id: string; number: number; outcome: Outcome; at: string } | null;
-}
 
 /** A page of the flows that the person may see, each with its newest assessment. */
 export async function listFlows(scope: ActorScope, params: ListParams): Promise<ListPage<FlowRow>> {

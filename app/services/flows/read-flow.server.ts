@@ -1,17 +1,19 @@
-import type { EntityManager } from "@mikro-orm/postgresql";
+import type { EntityManager, Loaded } from "@mikro-orm/postgresql";
 import { FlowStepFilm } from "#app/db/entities/flow-step-film.ts";
 import { FlowStep } from "#app/db/entities/flow-step.ts";
 import { Flow } from "#app/db/entities/flow.ts";
 import { mayInProgram } from "#app/policies/permissions.ts";
+import type { FlowDetail, StepDetail, StepFilmDetail } from "#app/schemas/flow-view.ts";
 import { notFound } from "#app/server/problem.server.ts";
 import type { ActorScope } from "#app/server/scope.server.ts";
 import { requireInProgram } from "../permission.server.ts";
 import { stampOf } from "../record.server.ts";
-import type { FlowDetail, StepDetail, StepFilmDetail } from "./flow-detail.ts";
 import { bondingMaterialInput, carrierInput, equipmentInput, filmInput } from "./flow-inputs.ts";
 
+type LoadedFlow = Loaded<Flow, "program" | "silicon" | "updatedBy">;
+
 /** The flow that an id names, if the person may see it. */
-export async function findFlow(em: EntityManager, scope: ActorScope, id: string): Promise<Flow> {
+export async function findFlow(em: EntityManager, scope: ActorScope, id: string): Promise<LoadedFlow> {
   const flow = await em.findOne(Flow, { id }, { populate: ["program", "silicon", "updatedBy"] });
   if (!flow) throw notFound("flow");
   requireInProgram(scope, "see the work", flow.program.id, "flow");
@@ -21,6 +23,18 @@ export async function findFlow(em: EntityManager, scope: ActorScope, id: string)
 /** A flow with its steps, in order. */
 export async function readFlow(em: EntityManager, scope: ActorScope, id: string): Promise<FlowDetail> {
   const flow = await findFlow(em, scope, id);
+  return {
+    ...(await flowDetailOf(em, flow)),
+    mayEdit: mayInProgram(scope.actor, "edit stacks and flows", flow.program.id),
+    mayAssess: mayInProgram(scope.actor, "run assessments", flow.program.id),
+  };
+}
+
+/** What a flow is, whoever asks: its head, with program, silicon and last editor loaded, and its steps in order. */
+export async function flowDetailOf(
+  em: EntityManager,
+  flow: LoadedFlow,
+): Promise<Omit<FlowDetail, "mayEdit" | "mayAssess">> {
   const steps = await em.find(
     FlowStep,
     { flow: flow.id },
@@ -51,8 +65,6 @@ export async function readFlow(em: EntityManager, scope: ActorScope, id: string)
       ),
     ),
     stamp: stampOf(flow),
-    mayEdit: mayInProgram(scope.actor, "edit stacks and flows", program.id),
-    mayAssess: mayInProgram(scope.actor, "run assessments", program.id),
   };
 }
 

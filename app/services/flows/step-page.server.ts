@@ -1,10 +1,11 @@
 import type { StepChoices } from "#app/lib/flow-step-choices.ts";
 import { waferBefore, type WaferBefore } from "#app/lib/flow-wafer-before.ts";
+import type { FlowDetail, StepDetail } from "#app/schemas/flow-view.ts";
 import { notFound } from "#app/server/problem.server.ts";
 import type { ActorScope } from "#app/server/scope.server.ts";
 import { requireInProgram } from "../permission.server.ts";
 import { idFrom } from "../uuid.server.ts";
-import { flowInputOf, type FlowDetail, type StepDetail } from "./flow-detail.ts";
+import { flowInputOf } from "./flow-inputs.ts";
 import { getFlow } from "./flows.server.ts";
 import { stepChoices } from "./step-choices.server.ts";
 import { stepNumber } from "./step-number.ts";

@@ -1,12 +1,13 @@
 import { renderToStaticMarkup } from "react-dom/server";
 import { createRoutesStub } from "react-router";
 import { describe, expect, it } from "vitest";
-import { FlowAnswer, type FlowAssessmentRow } from "#app/components/flows/FlowAnswer.tsx";
+import { FlowAnswer } from "#app/components/flows/FlowAnswer.tsx";
 import { FlowPlan } from "#app/components/flows/FlowPlan.tsx";
 import { FlowSteps } from "#app/components/flows/FlowSteps.tsx";
 import { planColumns } from "#app/lib/flow-plan.ts";
 import { stepRows, type ShownStep } from "#app/lib/flow-rows.ts";
 import type { Measured } from "#app/engine/measured.ts";
+import type { FlowAssessmentRow } from "#app/schemas/flow-view.ts";
 
 const stated = (value: number): Measured => ({ value, tolerance: null, source: "supplier" });
 

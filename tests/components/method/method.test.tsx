@@ -1,34 +1,16 @@
 import { describe, expect, it } from "vitest";
 import { Cautions } from "#app/components/cautions/Cautions.tsx";
 import { CAUTION_SIGNS } from "#app/components/method/CautionSign.tsx";
-import { FormulaText } from "#app/components/method/FormulaText.tsx";
 import { MethodView } from "#app/components/method/MethodView.tsx";
 import { leftOut } from "#app/components/method/method-words.ts";
-import type { RuleText } from "#app/components/method/RuleEntry.tsx";
 import { EQUATIONS } from "#app/engine/equations.ts";
 import { SOURCES } from "#app/engine/sources.ts";
+import type { RuleText } from "#app/schemas/rule-text.ts";
 import { attributes, render, words } from "#tests/components/drawings/render.ts";
 import { strangeCharacters } from "#tests/components/glyphs.ts";
 
 const LIMIT = { title: "200 mm wafer: bare from", value: "310\u00A0µm", delivered: "300\u00A0µm", source: "trial 12" };
 const rule = (limits: RuleText["limits"]): RuleText => ({ number: 1, title: "Thickness", asks: "Is it held?", limits });
-
-describe("a formula", () => {
-  it.each([
-    ["κ = 6 σ_f h_f / (M h^2)", "κ = 6 σ<sub>f</sub> h<sub>f</sub> / (M h<sup>2</sup>)"],
-    ["T × 10^(−6)", "T × 10<sup>−6</sup>"],
-    ["2 c_2 / (1 + c_1^2)^1.5", "2 c<sub>2</sub> / (1 + c<sub>1</sub><sup>2</sup>)<sup>1.5</sup>"],
-    ["α_base dT", "α<sub>base</sub> dT"],
-    ["no marks", "no marks"],
-  ])("%s", (text, markup) => expect(render(<FormulaText text={text} />)).toBe(markup));
-
-  it("of the engine leaves no mark behind", () => {
-    for (const { formula, symbols } of Object.values(EQUATIONS)) {
-      const shown = words(render(<FormulaText text={[formula, ...symbols.map(({ symbol }) => symbol)].join(" ")} />));
-      expect(shown).not.toMatch(/[_^]/);
-    }
-  });
-});
 
 describe("the method page", () => {
   const markup = render(<MethodView rules={[rule([LIMIT])]} engineVersion="0.1.0" />);

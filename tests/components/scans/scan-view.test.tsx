@@ -7,7 +7,7 @@ import type { ScanDetail } from "#app/schemas/scan-view.ts";
 import { scanResult } from "#app/services/scan-result-of.ts";
 import { render, words } from "#tests/components/drawings/render.ts";
 import { strangeCharacters } from "#tests/components/glyphs.ts";
-import { MONITOR, MONITOR_PARAMETERS, monitorProfile, profileCsv } from "#tests/fixtures/monitor-profile.ts";
+import { MONITOR, MONITOR_PARAMETERS, monitorProfile, profileCsv } from "#app/db/seeders/demo-monitor.ts";
 
 const PARAMETERS = { ...MONITOR_PARAMETERS, filmThicknessTolerance: null };
 

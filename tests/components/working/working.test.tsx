@@ -4,6 +4,7 @@ import { EQUATIONS } from "#app/engine/equations.ts";
 import { stoneyCurvatureWorking } from "#app/engine/stoney/working.ts";
 import type { UnitSymbol, Working } from "#app/engine/working.ts";
 import { Formula } from "#app/components/working/Formula.tsx";
+import { FormulaLines } from "#app/components/working/FormulaLines.tsx";
 import { WorkingView } from "#app/components/working/WorkingView.tsx";
 import { formatInUnit } from "#app/lib/format-unit.ts";
 import { render, words } from "../drawings/render.ts";
@@ -15,6 +16,8 @@ describe("a formula", () => {
     ["2 f / (1 + ν)^1.5", "2 f / (1 + ν)<sup>1.5</sup>"],
     ["κ − κ_0", "κ − κ<sub>0</sub>"],
     ["e^(−x t) + 1", "e<sup>−x t</sup> + 1"],
+    ["2 c_2 / (1 + c_1^2)^1.5", "2 c<sub>2</sub> / (1 + c<sub>1</sub><sup>2</sup>)<sup>1.5</sup>"],
+    ["α_base dT", "α<sub>base</sub> dT"],
     ["10^−6 m", "10<sup>−6</sup> m"],
     ["S/S_cr", "S/S<sub>cr</sub>"],
     ["σ = M ε", "σ = M ε"],
@@ -22,8 +25,14 @@ describe("a formula", () => {
     expect(render(<Formula text={text} />)).toBe(markup);
   });
 
-  it.each(Object.entries(EQUATIONS))("of %s leaves no mark of its notation behind", (_, { formula }) => {
-    expect(words(render(<Formula text={formula} />))).not.toMatch(/[_^]/);
+  it.each(Object.entries(EQUATIONS))("of %s leaves no mark of its notation behind", (_, { formula, symbols }) => {
+    for (const text of [formula, ...symbols.map(({ symbol }) => symbol)])
+      expect(words(render(<Formula text={text} />))).not.toMatch(/[_^]/);
+  });
+
+  it("of several relations has a line for each, and parts nothing inside brackets", () => {
+    const lines = (formula: string) => render(<FormulaLines title="t" formula={formula} />).match(/<p/g)?.length;
+    expect(lines("a = b, c = f(d, e)")).toBe(2);
   });
 });
 

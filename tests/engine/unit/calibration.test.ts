@@ -115,7 +115,7 @@ describe("calibration of a pair", () => {
     }
     // 95.4 % of 40 is 38.2 with a standard deviation of 1.3: three of those below.
     for (const count of inside) expect(count).toBeGreaterThanOrEqual(34);
-  });
+  }, 30_000);
 
   it("takes twice the uncertainty from bows measured half as well", () => {
     const at = (u: number) =>

@@ -39,7 +39,7 @@ describe("the answer in plain words", () => {
     const [support, tightest] = answer(flow([pulling(280), step()]));
     expect(support).toBe("Runs with cautions: no step needs support.");
     expect(plain(tightest)).toMatch(
-      /^Tightest: step 1, edges up \d+ µm as it leaves; Deposition tool takes 280 µm edges up\./,
+      /^Tightest: step 1, edges up \d+ µm as it leaves; deposition tool takes 280 µm edges up\./,
     );
   });
 
@@ -47,7 +47,7 @@ describe("the answer in plain words", () => {
     const [support, cause] = answer(flow([step(), pulling(100), pulling(100)]));
     expect(support).toBe("No step needs support.");
     expect(plain(cause)).toMatch(
-      /^Step 2, Deposit nitride: Edges up \d+ µm as it leaves; Deposition tool takes 100 µm/,
+      /^Step 2, Deposit nitride: Edges up \d+ µm as it leaves; deposition tool takes 100 µm/,
     );
   });
 

@@ -120,7 +120,7 @@ const faults: { fault: string; steps: StepInput[]; says: string }[] = [
   {
     fault: "does not fit its tool",
     steps: [step({ equipment: tool({ name: "Coater", largestDiameter: exact(0.15) }) })],
-    says: "The wafer measures 200\u00a0mm; Coater takes 150\u00a0mm",
+    says: "The wafer measures 200\u00a0mm; coater takes 150\u00a0mm",
   },
   {
     fault: "has a carrier that does not fit the tool",

@@ -3,7 +3,8 @@
  * lies above the plane with the device side up.
  */
 import { describe, expect, it } from "vitest";
-import { isRolled, lyingAs, releasedText, shapeText, standardBowText } from "#app/lib/assessment-shape.ts";
+import { releasedText, shapeText, standardBowText } from "#app/lib/assessment-shape.ts";
+import { isRolled, lyingAs } from "#app/lib/lying-as.ts";
 import type { ShapeResult } from "#app/schemas/assessment-result.ts";
 
 const bowl: ShapeResult = {

@@ -2,7 +2,7 @@ import { readFileSync } from "node:fs";
 import { describe, expect, it } from "vitest";
 import { readProfile, type ProfileFormat } from "#app/lib/profile-csv.ts";
 import { ProfileFileError } from "#app/lib/profile-text.ts";
-import { monitorProfile, profileCsv, type CsvStyle } from "#tests/fixtures/monitor-profile.ts";
+import { monitorProfile, profileCsv, type CsvStyle } from "#app/db/seeders/demo-monitor.ts";
 
 const POINT: ProfileFormat = { positionUnit: "mm", heightUnit: "µm", decimalMark: "point" };
 const COMMA: ProfileFormat = { ...POINT, decimalMark: "comma" };

@@ -13,7 +13,7 @@ import {
   MONITOR_PARAMETERS,
   monitorProfile,
   profileCsv,
-} from "#tests/fixtures/monitor-profile.ts";
+} from "#app/db/seeders/demo-monitor.ts";
 
 const VALUES: ScanValues = {
   program: "00000000-0000-4000-8000-000000000000",

@@ -5,7 +5,7 @@ import { fileSize } from "#app/lib/file-size.ts";
 import { bowWord, scanAnswer, senseOf } from "#app/lib/scan-answer.ts";
 import { scanRemarks } from "#app/lib/scan-remarks.ts";
 import type { ScanParameters, ScanResult } from "#app/schemas/scan-result.ts";
-import { MONITOR_PARAMETERS } from "#tests/fixtures/monitor-profile.ts";
+import { MONITOR_PARAMETERS } from "#app/db/seeders/demo-monitor.ts";
 
 const plain = (text: string) => text.replaceAll("\u00A0", " ");
 

@@ -1,8 +1,6 @@
 import { describe, expect, it } from "vitest";
-import { lyingAs } from "#app/lib/lying-as.ts";
 import { groupFlows, headline, SHOWN } from "#app/lib/today-groups.ts";
 import type { Outcome } from "#app/engine/vocabulary.ts";
-import type { ShapeResult } from "#app/schemas/assessment-result.ts";
 import type { TodayFlow } from "#app/schemas/today.ts";
 
 const day = (number: number) => `2026-11-${String(number).padStart(2, "0")}T08:00:00.000Z`;
@@ -73,34 +71,4 @@ describe("the sentence at the top", () => {
       }),
     ).toBe(sentence);
   });
-});
-
-describe("a wafer as it lies", () => {
-  const shape: ShapeResult = {
-    temperature: 298.15,
-    bow: -2e-4,
-    warp: 2e-4,
-    edgesUp: true,
-    regime: "nonlinear",
-    stabilityRatio: 0.2,
-    rollRadius: null,
-    standardUncertainty: null,
-    working: null,
-  };
-
-  it("has its centre low while its edges are up, whichever side is up", () => {
-    expect(lyingAs(shape)).toEqual({ kind: "bowed", bow: -2e-4 });
-    expect(lyingAs({ ...shape, bow: 2e-4 })).toEqual({ kind: "bowed", bow: -2e-4 });
-    expect(lyingAs({ ...shape, edgesUp: false })).toEqual({ kind: "bowed", bow: 2e-4 });
-  });
-
-  it("is a roll once curled, never a bow", () => {
-    expect(lyingAs({ ...shape, regime: "curled", rollRadius: 0.3 })).toEqual({
-      kind: "rolled",
-      radius: 0.3,
-      edgesUp: true,
-    });
-  });
-
-  it("is held where nothing is free", () => expect(lyingAs(null)).toEqual({ kind: "held" }));
 });

@@ -8,6 +8,7 @@ import { formatBare } from "#app/lib/format-measured.ts";
 import { readListParams } from "#app/lib/list-params.ts";
 import { programsWhere } from "#app/policies/permissions.ts";
 import { scopeOf } from "#app/server/contexts.server.ts";
+import { withinPages } from "#app/server/list-page.server.ts";
 import { FLOW_SORTS, listFlows } from "#app/services/flows/flows.server.ts";
 import type { Route } from "./+types/list";
 
@@ -17,7 +18,7 @@ export async function loader({ context, url }: Route.LoaderArgs) {
   const scope = scopeOf(context);
   const params = readListParams(url.searchParams, { sorts: FLOW_SORTS, filters: ["program"], descending: true });
   return {
-    page: await listFlows(scope, params),
+    page: withinPages(url, await listFlows(scope, params)),
     programs: programsWhere(scope.actor, "see the work").map(({ programName, programSlug }) => ({
       value: programSlug,
       label: programName,

@@ -1,12 +1,13 @@
-import { Link, redirect } from "react-router";
+import { Link } from "react-router";
 import { PageHead } from "#app/components/layout/PageHead.tsx";
 import { DataTable } from "#app/components/ui/DataTable.tsx";
 import { EmptyState } from "#app/components/ui/EmptyState.tsx";
 import { ListHead } from "#app/components/ui/ListHead.tsx";
 import { SCAN_COLUMNS } from "#app/components/scans/scan-columns.tsx";
-import { readListParams, withParams } from "#app/lib/list-params.ts";
+import { readListParams } from "#app/lib/list-params.ts";
 import { programsWhere } from "#app/policies/permissions.ts";
 import { scopeOf } from "#app/server/contexts.server.ts";
+import { withinPages } from "#app/server/list-page.server.ts";
 import { listScans, SCAN_SORTS, scanPrograms } from "#app/services/scans.server.ts";
 import type { Route } from "./+types/list";
 
@@ -16,9 +17,7 @@ export async function loader({ context, url }: Route.LoaderArgs) {
   const scope = scopeOf(context);
   const programs = scanPrograms(scope, "see the work");
   const params = readListParams(url.searchParams, { sorts: SCAN_SORTS, filters: ["program"], descending: true });
-  const page = await listScans(scope, params);
-  // A page past the last one: an old link, or somebody narrowed the search.
-  if (page.rows.length === 0 && page.total > 0) throw redirect(`/scans${withParams(url.searchParams, { page: null })}`);
+  const page = withinPages(url, await listScans(scope, params));
   return {
     page,
     programs: programs.map(({ programName, programSlug }) => ({ value: programSlug, label: programName })),

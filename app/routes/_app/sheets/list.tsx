@@ -2,6 +2,7 @@ import { SheetList } from "#app/components/sheet/SheetList.tsx";
 import { readListParams } from "#app/lib/list-params.ts";
 import { programsWhere } from "#app/policies/permissions.ts";
 import { scopeOf } from "#app/server/contexts.server.ts";
+import { withinPages } from "#app/server/list-page.server.ts";
 import { ASSESSMENT_SORTS, listNewestAssessments } from "#app/services/assessments/newest-assessments.server.ts";
 import type { Route } from "./+types/list";
 
@@ -16,7 +17,7 @@ export async function loader({ context, url }: Route.LoaderArgs) {
   // Nothing that is not released may reach a guest: there is no list to search.
   if (programs.length === 0) return { page: null, programs };
   const params = readListParams(url.searchParams, { sorts: ASSESSMENT_SORTS, filters: ["program", "outcome"] });
-  return { page: await listNewestAssessments(scope, params), programs };
+  return { page: withinPages(url, await listNewestAssessments(scope, params)), programs };
 }
 
 export default function Sheets({ loaderData }: Route.ComponentProps) {

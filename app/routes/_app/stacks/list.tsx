@@ -8,6 +8,7 @@ import { ListHead } from "#app/components/ui/ListHead.tsx";
 import { readListParams } from "#app/lib/list-params.ts";
 import { programsWhere } from "#app/policies/permissions.ts";
 import { scopeOf } from "#app/server/contexts.server.ts";
+import { withinPages } from "#app/server/list-page.server.ts";
 import { listStacks, STACK_SORTS } from "#app/services/stacks.server.ts";
 import type { Route } from "./+types/list";
 
@@ -16,7 +17,7 @@ export const meta: Route.MetaFunction = () => [{ title: "Stacks · Planeward" }]
 export async function loader({ context, url }: Route.LoaderArgs) {
   const scope = scopeOf(context);
   const params = readListParams(url.searchParams, { sorts: STACK_SORTS, filters: ["program"], descending: true });
-  const { flatWithin, ...page } = await listStacks(scope, params);
+  const { flatWithin, ...page } = withinPages(url, await listStacks(scope, params));
   return {
     page,
     flatWithin,

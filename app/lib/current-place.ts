@@ -1,0 +1,6 @@
+/** Whether an address lies in the place that has the path; the assessment of a flow lies in the flows. */
+export function liesIn(path: string, address: string): boolean {
+  const below = (top: string) => address === top || address.startsWith(`${top}/`);
+  if (path === "/") return address === "/";
+  return below(path) || (path === "/flows" && below("/assessments"));
+}

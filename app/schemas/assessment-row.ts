@@ -1,0 +1,15 @@
+import type { Outcome } from "#app/engine/vocabulary.ts";
+
+/** The newest assessment of a flow in a list: what a sheet is printed from. */
+export interface AssessmentRow {
+  id: string;
+  documentNumber: number;
+  flow: string;
+  program: string;
+  programSlug: string;
+  outcome: Outcome;
+  createdAt: string;
+  createdBy: string;
+  /** the flow itself has been changed since */
+  flowChanged: boolean;
+}

@@ -1,0 +1,115 @@
+import { randomUUID } from "node:crypto";
+import { readFileSync } from "node:fs";
+import { MikroORM } from "@mikro-orm/postgresql";
+import type { APIRequestContext } from "@playwright/test";
+import { databaseOptions } from "#app/db/options.ts";
+import { TERN } from "./flow-pages.ts";
+
+/** What stands for the parameters of an address, by their names in the table of routes. */
+export type DoorIds = Record<string, string>;
+
+/** Parameters that name something of one program; every other one names something of the whole site. */
+export const WALLED: readonly string[] = ["flowId", "stepId", "assessmentId", "stackId", "scanId", "fileId"];
+
+type Query = <Row>(sql: string, params?: unknown[]) => Promise<Row[]>;
+
+/** Lets the callback ask the database as its owner, whom no wall stops. */
+async function asOwner<Result>(ask: (query: Query) => Promise<Result>): Promise<Result> {
+  const url = process.env["DATABASE_OWNER_URL"];
+  if (!url) throw new Error("DATABASE_OWNER_URL is not set: run the browser tests through npm test.");
+  const orm = await MikroORM.init({ ...databaseOptions(url), pool: { min: 0, max: 1 } });
+  try {
+    const connection = orm.em.fork().getConnection();
+    return await ask(<Row>(sql: string, params: unknown[] = []) => connection.execute<Row[]>(sql, params));
+  } finally {
+    await orm.close();
+  }
+}
+
+async function idOf(query: Query, sql: string, params: unknown[] = []): Promise<string> {
+  const [row] = await query<{ id: string }>(sql, params);
+  if (!row) throw new Error(`The demo data has no row for: ${sql}`);
+  return row.id;
+}
+
+const fixture = (name: string) => ({
+  name,
+  mimeType: "text/csv",
+  buffer: readFileSync(new URL(`../../fixtures/scans/${name}`, import.meta.url)),
+});
+
+/** Ids of the program Tern, to which every role belongs. The engineer adds an assessment and a scan to the demo's own data. */
+export async function ternIds(engineer: APIRequestContext): Promise<DoorIds> {
+  const known = await asOwner(async (query) => {
+    const flowId = await idOf(query, "select id from flow where name = ?", [TERN]);
+    return {
+      flowId,
+      program: await idOf(query, "select id from program where slug = 'tern'"),
+      stepId: await idOf(query, "select id from flow_step where flow_id = ? and position = 1", [flowId]),
+      stackId: await idOf(
+        query,
+        "select s.id from stack s join program p on p.id = s.program_id where p.slug = 'tern'",
+      ),
+      filmId: await idOf(query, "select id from film where name = 'Polymer dielectric A'"),
+      recordId: await idOf(query, "select id from carrier order by name limit 1"),
+    };
+  });
+  const added = async (path: string, options: Parameters<APIRequestContext["post"]>[1]) => {
+    const { location } = (await engineer.post(path, { ...options, maxRedirects: 0 })).headers();
+    const id = location?.split("/").at(-1);
+    if (!id) throw new Error(`A post to ${path} led nowhere.`);
+    return id;
+  };
+  const assessmentId = await added(`/flows/${known.flowId}`, { form: { intent: "assess" } });
+  const scanId = await added("/scans/new", {
+    multipart: {
+      program: known.program,
+      label: "M-door",
+      film: known.filmId,
+      orientation: "100",
+      filmThickness: "5 um",
+      siliconThickness: "725 um",
+      diameter: "200 mm",
+      edgeExclusion: "5 mm",
+      positionUnit: "mm",
+      heightUnit: "µm",
+      decimalMark: "point",
+      before: fixture("monitor-200mm-725um-before-film-seed-7.csv"),
+      after: fixture("monitor-200mm-725um-after-5um-film-31MPa-seed-7.csv"),
+    },
+  });
+  const fileId = await asOwner((query) => idOf(query, "select before_id as id from scan where id = ?", [scanId]));
+  return { ...known, assessmentId, scanId, fileId, kind: "carriers", "*": "nowhere/at/all" };
+}
+
+/** Copies of the same rows in a program of their own, to which nobody belongs. */
+export function strangeIds(own: DoorIds): Promise<DoorIds> {
+  return asOwner(async (query) => {
+    const name = `heron-${randomUUID()}`;
+    const program = await idOf(
+      query,
+      `insert into program (id, name, slug, purpose, diameter, created_at)
+         values (gen_random_uuid(), ?, ?, 'Nobody belongs to it', 0.2, now()) returning id`,
+      [name, name],
+    );
+    const copy = (table: string, id: string | undefined, changes: Record<string, unknown> = {}) =>
+      idOf(
+        query,
+        `insert into "${table}" select changed.* from "${table}" original,
+           jsonb_populate_record(original, ?::jsonb || jsonb_build_object('id', gen_random_uuid())) changed
+           where original.id = ? returning id`,
+        [JSON.stringify({ program_id: program, ...changes }), id],
+      );
+    const flowId = await copy("flow", own["flowId"]);
+    const fileId = await copy("scan_file", own["fileId"]);
+    return {
+      ...own,
+      flowId,
+      fileId,
+      stepId: await copy("flow_step", own["stepId"], { flow_id: flowId }),
+      assessmentId: await copy("assessment", own["assessmentId"], { flow_id: flowId }),
+      stackId: await copy("stack", own["stackId"]),
+      scanId: await copy("scan", own["scanId"], { before_id: fileId, after_id: fileId }),
+    };
+  });
+}

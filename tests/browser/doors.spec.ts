@@ -1,0 +1,129 @@
+import { request as newRequest, type APIRequestContext } from "@playwright/test";
+import type { RouteConfigEntry } from "@react-router/dev/routes";
+import routes from "#app/routes.ts";
+import { strangeIds, ternIds, WALLED, type DoorIds } from "./door-ids.ts";
+import { accountOf, expect, test, type Role } from "./support.ts";
+
+const VISITORS = [
+  "nobody",
+  "guest",
+  "technician",
+  "engineer",
+  "process owner",
+  "shift lead",
+  "administrator",
+] as const satisfies ("nobody" | Role)[];
+
+/**
+ * What every address answers to a GET, in the order of the visitors, with ids of a program that all of them belong to. A route
+ * without a line here fails the tests, so nobody adds one without saying who may pass.
+ */
+const DOORS: Record<string, string> = {
+  "/healthz": "200 200 200 200 200 200 200",
+  "/readyz": "200 200 200 200 200 200 200",
+  "/sign-in": "200 302 302 302 302 302 302",
+  "/sign-out": "302 302 302 302 302 302 302",
+  "/api/v1/estimates": "405 405 405 405 405 405 405",
+  "/sheets/:assessmentId": "302 404 200 200 200 200 404",
+  "/": "302 200 200 200 200 200 200",
+  "/films": "302 403 200 200 200 200 200",
+  "/films/new": "302 403 403 200 200 403 403",
+  "/films/:filmId": "302 403 200 200 200 200 200",
+  "/films/:filmId/edit": "302 403 403 200 200 403 403",
+  "/stacks": "302 403 200 200 200 200 403",
+  "/stacks/new": "302 403 403 200 200 403 403",
+  "/stacks/:stackId": "302 404 200 200 200 200 404",
+  "/flows": "302 403 200 200 200 200 403",
+  "/flows/new": "302 403 403 200 200 403 403",
+  "/flows/:flowId": "302 404 200 200 200 200 404",
+  "/flows/:flowId/edit": "302 404 403 200 200 403 404",
+  "/flows/:flowId/steps/new": "302 404 403 200 200 403 404",
+  "/flows/:flowId/steps/:stepId": "302 404 200 200 200 200 404",
+  "/assessments/:assessmentId": "302 404 200 200 200 200 404",
+  "/assessments/:assessmentId/working": "302 404 200 200 200 200 404",
+  "/carriers": "302 403 302 302 302 302 302",
+  "/carriers/limits": "302 403 200 200 200 200 200",
+  "/carriers/:kind": "302 403 200 200 200 200 200",
+  "/carriers/:kind/new": "302 403 403 403 200 403 200",
+  "/carriers/:kind/:recordId": "302 403 200 200 200 200 200",
+  "/carriers/:kind/:recordId/edit": "302 403 403 403 200 403 200",
+  "/scans": "302 403 200 200 200 200 403",
+  "/scans/new": "302 403 200 200 200 200 403",
+  "/scans/files/:fileId": "302 404 200 200 200 200 404",
+  "/scans/:scanId": "302 404 200 200 200 200 404",
+  "/sheets": "302 200 200 200 200 200 200",
+  "/method": "302 200 200 200 200 200 200",
+  "/*": "302 404 404 404 404 404 404",
+};
+
+/** Every address of the application, as the route table has it. */
+function addresses(entries: RouteConfigEntry[], above = ""): string[] {
+  return entries.flatMap(({ path, children }) => {
+    const here = path ? `${above}/${path}` : above;
+    return children ? addresses(children, here) : [here || "/"];
+  });
+}
+
+/** What an address asks for that shows nothing without it. */
+const ASKED: Record<string, string> = { "/assessments/:assessmentId/working": "?step=14&shape=released" };
+
+/** The address with ids in it. */
+const filled = (address: string, ids: DoorIds) =>
+  address.replace(/:(\w+)|\*/g, (parameter, name: string | undefined) => ids[name ?? parameter] ?? parameter) +
+  (ASKED[address] ?? "");
+
+async function visitor(role: (typeof VISITORS)[number], baseURL: string | undefined): Promise<APIRequestContext> {
+  const context = await newRequest.newContext({ baseURL: baseURL ?? "" });
+  if (role === "nobody") return context;
+  const { email, password } = accountOf(role);
+  const answer = await context.post("/sign-in", { form: { email, password }, maxRedirects: 0 });
+  expect(answer.status()).toBe(302);
+  return context;
+}
+
+let own: DoorIds = {};
+let strange: DoorIds = {};
+
+test.beforeAll(async ({ baseURL }) => {
+  test.setTimeout(120_000);
+  const engineer = await visitor("engineer", baseURL);
+  own = await ternIds(engineer);
+  strange = await strangeIds(own);
+  await engineer.dispose();
+});
+
+test("every route has its line in the table of doors", () => {
+  expect(addresses(routes).toSorted()).toEqual(Object.keys(DOORS).toSorted());
+});
+
+for (const [column, role] of VISITORS.entries())
+  test.describe(`${role} at the door`, () => {
+    // Some sixty pages one after the other.
+    test.setTimeout(180_000);
+
+    const answers = async (context: APIRequestContext, ids: DoorIds, asked: readonly string[]) => {
+      const found: Record<string, string> = {};
+      for (const address of asked)
+        found[address] = String((await context.get(filled(address, ids), { maxRedirects: 0 })).status());
+      return found;
+    };
+
+    test("gets what the table says of each address of their own program", async ({ baseURL }) => {
+      const context = await visitor(role, baseURL);
+      const asked = Object.keys(DOORS);
+      const expected = Object.fromEntries(asked.map((address) => [address, DOORS[address]?.split(" ")[column]]));
+      expect(await answers(context, own, asked)).toEqual(expected);
+      await context.dispose();
+    });
+
+    test("gets nothing of a program that is not their own, and no word that it exists", async ({ baseURL }) => {
+      const context = await visitor(role, baseURL);
+      const asked = Object.keys(DOORS).filter((address) => WALLED.some((name) => address.includes(`:${name}`)));
+      const expected = Object.fromEntries(asked.map((address) => [address, role === "nobody" ? "302" : "404"]));
+      expect(await answers(context, strange, asked)).toEqual(expected);
+      const { stepId = "" } = strange;
+      const step = "/flows/:flowId/steps/:stepId";
+      expect(await answers(context, { ...own, stepId }, [step])).toEqual({ [step]: expected[step] });
+      await context.dispose();
+    });
+  });
