@@ -110,13 +110,20 @@ export function balanceLayers(layers: readonly PlacedLayer[], slidingOn?: Slidin
  * that nothing large cancels for a thin film on a wafer.
  */
 function bend(layers: readonly PlacedLayer[]) {
-  const thickness = Float64Array.from(layers, (l) => l.thickness);
-  const modulus = Float64Array.from(layers, (l) => l.coveredModulus);
-  const bottom = -layers.reduce((total, l) => total + l.thickness, 0) / 2;
-  const sums = new Float64Array(LAMINATE_SUMS);
+  const count = layers.length;
+  if (scratch.thickness.length < count) scratch = columns(2 * count);
+  const { thickness, modulus, pressure, sums } = scratch;
+  let total = 0;
+  layers.forEach((l, n) => {
+    thickness[n] = l.thickness;
+    modulus[n] = l.coveredModulus;
+    total += l.thickness;
+  });
   const sumAbout = (plane: number, strain: number) => {
-    const pressure = Float64Array.from(layers, (l) => l.coveredModulus * (l.freeStrain - strain));
-    laminateSums(layers.length, thickness, 0, modulus, pressure, bottom - plane, sums);
+    layers.forEach((l, n) => {
+      pressure[n] = l.coveredModulus * (l.freeStrain - strain);
+    });
+    laminateSums(count, thickness, 0, modulus, pressure, -total / 2 - plane, sums);
   };
   sumAbout(0, 0);
   const stretching = stretchingOf(sums);
@@ -132,5 +139,17 @@ function bend(layers: readonly PlacedLayer[]) {
     meanStrain,
     bendingStiffness: bendingStiffnessOf(sums),
     strainPerHeight: strainPerHeightOf(sums),
+  };
+}
+
+/** Columns that `bend` fills anew each time: a flow solves tens of thousands of stacks, and new ones would cost more than the sums. */
+let scratch = columns(64);
+
+function columns(size: number) {
+  return {
+    thickness: new Float64Array(size),
+    modulus: new Float64Array(size),
+    pressure: new Float64Array(size),
+    sums: new Float64Array(LAMINATE_SUMS),
   };
 }
