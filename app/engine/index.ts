@@ -136,6 +136,19 @@ export { bumpCoverWorking, thicknessBudgetWorking } from "./thickness-budget/wor
 export { dieAfterDicing, type DieAfterDicing, type DieAtTemperature, type DieInput } from "./die/die-after-dicing.ts";
 export { dieWarpWorking } from "./die/working.ts";
 
+// Flow in full: incoming shape, bonds that slide, expansion curves; inverse questions; calibration
+export { flowUncertainty, type FlowUncertainty } from "./flow/uncertainty.ts";
+export { incomingFromBows } from "./flow/silicon.ts";
+export type { IncomingShape } from "./flow/model.ts";
+export { flowPoint, glassTransition, lockTemperature, type BondState } from "./flow/bond.ts";
+export type { ExpansionCurve } from "./laminate/expansion-curve.ts";
+export { solveFor, type InverseAnswer, type InverseQuestion, type NoAnswer } from "./inverse/solve-for.ts";
+export { answerInWords, type Wording } from "./inverse/words.ts";
+export { balancingFilm, leastThickness, mostFilm, type Balance, type FilmQuantity } from "./inverse/stack-questions.ts";
+export { carrierExpansionFor, sagittaAfter, sagittasAfter } from "./inverse/flow-questions.ts";
+export { calibratePair, type Calibration, type CalibratedValue } from "./calibration/calibrate-pair.ts";
+export { withCalibration, type Calibrated, type PairMeasurement } from "./calibration/pair-model.ts";
+
 // Uncertainty: distributions, first order, Monte Carlo, lots
 export { spreadUncertainty, uncertainQuantity, type Spread, type UncertainQuantity } from "./uncertainty/quantity.ts";
 export type { Correlation } from "./uncertainty/correlation.ts";

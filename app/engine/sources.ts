@@ -341,6 +341,13 @@ export const SOURCES = {
     place: "estimate; a rectangle rolls at another size than a disc",
     basis: "own derivation",
   },
+  "sliding-pair": {
+    author: "this program",
+    title: "Pair of plates on an adhesive that flows: shared curvature, no shear, and the state in which it locks",
+    year: null,
+    place: "balance of forces of each plate and of the moments of both",
+    basis: "own derivation",
+  },
   "gum-supplement-1-2008": {
     author: "Joint Committee for Guides in Metrology",
     title: "JCGM 101:2008, Propagation of distributions using a Monte Carlo method",

@@ -1,7 +1,7 @@
 import { EngineInputError } from "../errors.ts";
 import { freeStrain } from "../laminate/free-strain.ts";
 import { ROOM_TEMPERATURE } from "../laminate/layer.ts";
-import { findBase } from "../laminate/solve-laminate.ts";
+import { findBase } from "../laminate/placed-layers.ts";
 import { factor, type Factor } from "./factor.ts";
 import { checkDirectionalLayer, type DirectionalLayer } from "./layer.ts";
 import {

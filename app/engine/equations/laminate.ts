@@ -43,6 +43,18 @@ export const LAMINATE = {
     sources: ["townsend-barnett-brunner-1987", "hsueh-2002", "hsueh-lee-chuang-2003", "freund-floro-chason-1999"],
     caution: "A free thin wafer may not follow it: see the shape of a free wafer.",
   },
+  "sliding-pair": {
+    title: "Curvature of a pair whose plates slide",
+    formula: "κ = (D_1 κ_1 + D_2 κ_2) / (D_1 + D_2)",
+    symbols: [
+      { symbol: "κ", meaning: "curvature that both plates share, positive for a bowl", unit: "1/m" },
+      { symbol: "κ_1", meaning: "curvature of the wafer by itself, κ_2 of the carrier", unit: "1/m" },
+      { symbol: "D_1", meaning: "biaxial bending stiffness of the wafer by itself, D_2 of the carrier", unit: "N·m" },
+    ],
+    range:
+      "An adhesive above its flow point: no shear between the plates, no gap. On cooling the pair locks at the flow point in the state found there.",
+    sources: ["sliding-pair"],
+  },
   "effective-thickness": {
     title: "Effective thickness of a stack",
     formula: "h_eff = sqrt(12 D / A)",

@@ -1,3 +1,5 @@
+import type { ExpansionCurve } from "../laminate/expansion-curve.ts";
+import type { FilmPattern } from "../patterned/pattern.ts";
 import type { Measured } from "../measured.ts";
 import type { Exposure, Holding, Side } from "../vocabulary.ts";
 
@@ -5,7 +7,7 @@ import type { Exposure, Holding, Side } from "../vocabulary.ts";
  * What a flow is made of, complete in itself: names, values and provenance are copied in, so a stored assessment can be
  * read for ever without the library it came from. SI units; temperatures in K.
  *
- * Left out in this version: incoming shape other than films, patterned lines, wafers of a lot, tape and clock limits.
+ * Left out in this version: wafers of a lot, tape and clock limits.
  */
 
 export const STEP_KINDS = [
@@ -48,9 +50,17 @@ export interface FilmInput {
   expansion: Measured;
   yieldStress: Measured | null;
   temperatureLimit: Measured | null;
+  /**
+   * Of a polymer: from here on it carries no stress, K; below, its stress falls in a straight line from that at 25 °C to zero
+   * here, on thick silicon. Without it the stress falls with the film's expansion until it is zero.
+   */
+  zeroStressTemperature?: Measured | null;
 }
 
-/** A film put down by a step. `stress` at 25 °C on a full-thickness monitor held flat, tension positive. */
+/**
+ * A film put down by a step. `stress` at 25 °C on a full-thickness monitor held flat, tension positive, of the film before it
+ * is cut into a pattern.
+ */
 export interface FilmAddition {
   side: Side;
   film: FilmInput;
@@ -58,12 +68,30 @@ export interface FilmAddition {
   stress: Measured;
   /** area fraction, 0 to 1 */
   coverage: number;
+  /** how it is cut, with its own coverage; without it the film bends both directions alike by its `coverage` */
+  pattern?: FilmPattern | null;
+}
+
+/**
+ * Shape that the wafer comes in with, flattened by nothing, gravity compensated. Curvatures are positive for a bowl, along x
+ * (the notch or flat, <110> on silicon (100)) and across it.
+ */
+export interface IncomingShape {
+  curvature: { x: Measured; y: Measured };
+  /** share of it, 0 to 1, that films on the device side cause, which grows as 1/h² when the wafer is thinned; the crystal's own
+   * stays. null when nobody knows: taken as film */
+  filmShare: Measured | null;
 }
 
 export const CARRIER_MATERIALS = ["silicon", "glass"] as const;
 export type CarrierMaterial = (typeof CARRIER_MATERIALS)[number];
 
-/** A carrier. `expansion` null means silicon's own curve. */
+/**
+ * A carrier. `expansion` null means silicon's own curve; a number is a mean, and `meanExpansionOver` (K) says between which
+ * temperatures. With `expansionCurve` the curve is integrated instead, and `expansion` only moves it as a whole: by how much
+ * its value lies above the mean of the curve over `meanExpansionOver`, by default the curve's own range, and its tolerance is the
+ * uncertainty of the whole curve.
+ */
 export interface CarrierInput {
   id: string;
   name: string;
@@ -73,6 +101,8 @@ export interface CarrierInput {
   youngsModulus: Measured;
   poissonsRatio: Measured;
   expansion: Measured | null;
+  meanExpansionOver?: { from: number; to: number } | null;
+  expansionCurve?: ExpansionCurve | null;
   temperatureLimit: Measured;
 }
 
@@ -87,8 +117,12 @@ export type ReleaseMethod = (typeof RELEASE_METHODS)[number];
 
 /**
  * A temporary bonding material. `effectiveModulus` is the locked-in modulus that couples the pair, calibrated on measured
- * pairs and far below the data sheet's. `softening` is the glass transition or softening point; `flows` is true for a
- * thermoplastic, which flows above it, false for a cross-linked material, which does not.
+ * pairs and far below the data sheet's. `flows` is true for a thermoplastic, false for a cross-linked material.
+ *
+ * `softening` is what data sheets call glass transition or softening point. Where it is known better, `glassTransition` says
+ * where the material turns from its locked-in modulus to a rubber (by default the softening point), and `flowPoint`, of a
+ * thermoplastic alone, from where on the plates slide. Without a flow point nothing slides: the pair keeps the state of rest
+ * that it was bonded in, and a step that reaches the softening point says so in its remarks.
  */
 export interface BondingMaterialInput {
   id: string;
@@ -98,6 +132,8 @@ export interface BondingMaterialInput {
   expansionBelow: Measured;
   expansionAbove: Measured;
   softening: Measured | null;
+  glassTransition?: Measured | null;
+  flowPoint?: Measured | null;
   flows: boolean;
   bondTemperature: Measured;
   temperatureLimit: Measured;
@@ -149,6 +185,12 @@ export interface StepInput {
 
 export interface FlowInput {
   name: string;
-  wafer: { name: string; diameter: number; orientation: "100" | "111"; thickness: Measured };
+  wafer: {
+    name: string;
+    diameter: number;
+    orientation: "100" | "111";
+    thickness: Measured;
+    incoming?: IncomingShape | null;
+  };
   steps: StepInput[];
 }

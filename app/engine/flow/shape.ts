@@ -1,56 +1,75 @@
 import type { Layer } from "../laminate/layer.ts";
-import type { LaminateResult } from "../laminate/solve-laminate.ts";
+import type { LaminateBalance } from "../laminate/solve-laminate.ts";
 import { freeWaferShape, type FreeWaferShapeInput } from "../plate/free-wafer-shape.ts";
-import { siliconPlateConstants } from "../silicon/plane-constants.ts";
 import type { FaceUp, ShapeRegime, ShapeWord } from "../vocabulary.ts";
+import { waferConstants } from "./silicon.ts";
+import type { UnequalCurvature } from "./unequal.ts";
 import type { FlowInput } from "./model.ts";
 
 /** Shape of a wafer or pair that lies free, device side up sign (a sagitta has the sign of the curvature). */
 export interface LyingShape {
   temperature: number;
-  /** curvature of the linear laminate, 1/m, positive for a bowl */
+  /** curvature of the linear laminate along the axis that bends most, 1/m, positive for a bowl */
   linearCurvature: number;
+  /** the same with both directions apart, where they differ */
+  unequal?: UnequalCurvature;
   /** centre to rim along the more curved axis, m, positive for a bowl */
   sagitta: number;
+  /** the same along the axis across */
+  sagittaMinor: number;
   /** peak to valley, m */
   warp: number;
   regime: ShapeRegime;
   /** load over the load at which it rolls about one axis */
   stabilityRatio: number;
   rollRadius: number | null;
-  /** what it was computed from: the laminate and the disc */
+  /** what it was computed from: the laminate, built when it is asked for, and the disc */
   layers: Layer[];
+  /** the carrier, where it slides on these layers */
+  slidingOn?: Layer[];
   disc: FreeWaferShapeInput;
+}
+
+/** A solved laminate of the flow's wafer. */
+export interface SolvedStack {
+  layers: () => Layer[];
+  solution: LaminateBalance;
+  temperature: number;
+  bonded: boolean;
+  slidingOn?: Layer[] | undefined;
+  unequal?: UnequalCurvature | undefined;
 }
 
 /** Shape of a solved laminate as a free disc of the flow's wafer. */
 export function lyingShape(
   wafer: FlowInput["wafer"],
-  layers: Layer[],
-  solution: LaminateResult,
-  temperature: number,
-  bonded: boolean,
+  { layers, solution, temperature, bonded, slidingOn, unequal }: SolvedStack,
 ): LyingShape {
-  const { youngsModulus, poissonsRatio } = siliconPlateConstants(wafer.orientation);
+  const { youngsModulus, poissonsRatio } = waferConstants(wafer.orientation);
   const disc: FreeWaferShapeInput = {
     radius: wafer.diameter / 2,
-    thickness: solution.effectiveThickness,
+    thickness: unequal?.effectiveThickness ?? solution.effectiveThickness,
     youngsModulus,
     poissonsRatio,
-    linearCurvature: solution.curvature,
+    linearCurvature: unequal ? { x: unequal.principal.major, y: unequal.principal.minor } : solution.curvature,
     // The crystal's preferred axes matter for silicon alone; a pair is governed by its isotropic partner too.
     crystal: bonded || wafer.orientation !== "100" ? undefined : "100",
   };
   const shape = freeWaferShape(disc);
   return {
     temperature,
-    linearCurvature: solution.curvature,
+    linearCurvature: unequal?.principal.major ?? solution.curvature,
+    ...(unequal ? { unequal } : {}),
     sagitta: shape.bowMajor,
+    sagittaMinor: shape.bowMinor,
     warp: shape.warp,
     regime: shape.regime,
     stabilityRatio: shape.stabilityRatio,
     rollRadius: shape.rollRadius,
-    layers,
+    get layers() {
+      return layers();
+    },
+    ...(slidingOn ? { slidingOn } : {}),
     disc,
   };
 }
@@ -65,5 +84,6 @@ export function shapeWord(shape: LyingShape | null, faceUp: FaceUp, flatWithin: 
   if (shape === null) return "held";
   if (shape.regime === "curled") return "rolls up";
   if (shape.warp <= flatWithin) return "flat";
+  if (shape.sagitta * shape.sagittaMinor < 0 && Math.abs(shape.sagittaMinor) > flatWithin) return "saddle";
   return edgesUp(shape, faceUp) ? "edges up" : "edges down";
 }

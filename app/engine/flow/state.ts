@@ -1,26 +1,33 @@
 import { EngineInputError } from "../errors.ts";
 import type { Measured } from "../measured.ts";
+import type { Orientation } from "../silicon/orientation.ts";
 import type { FaceUp, Holding, Side } from "../vocabulary.ts";
 import { ROOM_TEMPERATURE } from "../laminate/layer.ts";
-import type { BondInput, FilmAddition, FlowInput, StepInput } from "./model.ts";
+import type { BondState } from "./bond.ts";
+import { filmEntry } from "./film-entry.ts";
+import { incomingParts, siliconEntries, type Incoming } from "./silicon.ts";
+import type { StackEntry } from "./stack-entry.ts";
+import type { FilmAddition, FlowInput, StepInput } from "./model.ts";
 
 /** A film as it is on the wafer, with what it has been through. */
 export interface FilmState {
   addition: FilmAddition;
+  /** its layer as it came, checked */
+  entry: StackEntry;
   /** strain left by yielding, biaxial, tension positive */
   plasticStrain: number;
   /** hottest step so far, K */
   hottest: number;
 }
 
-/** A bond as it is: what joins the pair, and the temperature at which it was made. */
-export interface BondState extends BondInput {
-  bondTemperature: number;
-}
-
 /** The wafer between two steps. Films are listed from the silicon outwards. */
 export interface WaferState {
+  orientation: Orientation;
   silicon: Measured;
+  /** shape that it came in with; null for one that came flat */
+  incoming: Incoming | null;
+  /** its layers, checked */
+  siliconEntries: StackEntry[];
   front: FilmState[];
   back: FilmState[];
   /** force per length of the ground or polished back face, N/m, compression negative */
@@ -39,8 +46,13 @@ export interface WaferState {
 export function initialState(flow: FlowInput): WaferState {
   if (!(flow.wafer.thickness.value > 0))
     throw new EngineInputError("wafer.thickness", "the silicon must have a thickness", "> 0 m");
+  const { orientation, thickness } = flow.wafer;
+  const incoming = incomingParts(flow.wafer);
   return {
-    silicon: flow.wafer.thickness,
+    orientation,
+    silicon: thickness,
+    incoming,
+    siliconEntries: siliconEntries(orientation, thickness.value, 0, incoming),
     front: [],
     back: [],
     groundFaceForce: 0,
@@ -57,7 +69,7 @@ export function initialState(flow: FlowInput): WaferState {
 function add(films: FilmState[], side: Side, step: StepInput): FilmState[] {
   const added = step.adds
     .filter((addition) => addition.side === side)
-    .map((addition) => ({ addition, plasticStrain: 0, hottest: ROOM_TEMPERATURE }));
+    .map((addition) => ({ addition, entry: filmEntry(addition), plasticStrain: 0, hottest: ROOM_TEMPERATURE }));
   return [...films, ...added];
 }
 
@@ -100,12 +112,21 @@ export function applyStep(before: WaferState, step: StepInput, field: string): W
       : step.kind === "debond"
         ? null
         : before.bond;
+  const { orientation, incoming } = before;
+  const silicon = thinner && step.siliconAfter ? step.siliconAfter : before.silicon;
+  const groundFaceForce = step.groundFaceForce?.value ?? before.groundFaceForce;
+  const unchanged = silicon === before.silicon && groundFaceForce === before.groundFaceForce;
   return {
-    silicon: thinner && step.siliconAfter ? step.siliconAfter : before.silicon,
+    orientation,
+    silicon,
+    incoming,
+    siliconEntries: unchanged
+      ? before.siliconEntries
+      : siliconEntries(orientation, silicon.value, groundFaceForce, incoming),
     // A seed that is stripped and left only under the lines is one removal and one addition.
     front: add(remove(before.front, "front", step), "front", step),
     back: add(remove(before.back, "back", step), "back", step),
-    groundFaceForce: step.groundFaceForce?.value ?? before.groundFaceForce,
+    groundFaceForce,
     bond,
     mount: mountAfter(before, step),
     trim: step.edgeTrim ?? before.trim,
@@ -119,4 +140,46 @@ export function applyStep(before: WaferState, step: StepInput, field: string): W
 /** Films on both sides, outermost last. */
 export function allFilms(state: WaferState): FilmState[] {
   return [...state.front, ...state.back];
+}
+
+/**
+ * Whether two states bend alike from here on: the same silicon, films with the same history, ground face and bond. Inputs are
+ * compared by identity, which is what copies of one flow share.
+ */
+export function sameState(a: WaferState, b: WaferState): boolean {
+  const alike = (left: FilmState[], right: FilmState[]) =>
+    left.length === right.length &&
+    left.every((film, n) => {
+      const other = right[n];
+      return film.addition === other?.addition && film.plasticStrain === other.plasticStrain;
+    });
+  return (
+    a.silicon === b.silicon &&
+    sameIncoming(a.incoming, b.incoming) &&
+    a.groundFaceForce === b.groundFaceForce &&
+    sameBond(a.bond, b.bond) &&
+    alike(a.front, b.front) &&
+    alike(a.back, b.back)
+  );
+}
+
+function sameBond(a: BondState | null, b: BondState | null): boolean {
+  return (
+    a?.carrier === b?.carrier &&
+    a?.material === b?.material &&
+    a?.thickness === b?.thickness &&
+    a?.bondTemperature === b?.bondTemperature &&
+    a?.rest?.carrierStrain === b?.rest?.carrierStrain &&
+    a?.rest?.adhesiveStrain === b?.rest?.adhesiveStrain
+  );
+}
+
+function sameIncoming(a: Incoming | null, b: Incoming | null): boolean {
+  return (
+    a?.thickness === b?.thickness &&
+    a?.film.x === b?.film.x &&
+    a?.film.y === b?.film.y &&
+    a?.crystal.x === b?.crystal.x &&
+    a?.crystal.y === b?.crystal.y
+  );
 }

@@ -1,13 +1,12 @@
-import { EngineInputError } from "../errors.ts";
-import { solveLaminate } from "../laminate/solve-laminate.ts";
-import type { SiteLimits } from "../rules/limits.ts";
-import type { Holding, ShapeWord } from "../vocabulary.ts";
-import { layersOf } from "./layers.ts";
 import { ROOM_TEMPERATURE } from "../laminate/layer.ts";
+import type { SiteLimits } from "../rules/limits.ts";
+import type { ShapeWord } from "../vocabulary.ts";
 import type { FlowInput, StepInput } from "./model.ts";
-import { lyingShape, shapeWord, type LyingShape } from "./shape.ts";
-import { allFilms, applyStep, initialState, type WaferState } from "./state.ts";
-import { settle, type Settled } from "./yield.ts";
+import { stepRemarks } from "./remarks.ts";
+import { filmStresses } from "./settle.ts";
+import { shapeWord, type LyingShape } from "./shape.ts";
+import { allFilms, initialState, type WaferState } from "./state.ts";
+import { inStep, peakShape, releasedShape, roomShape, stepField, takeStep, type WalkedStep } from "./step.ts";
 
 /** One step of a walked flow: the wafer before and after, and its shapes. */
 export interface StepState {
@@ -24,19 +23,28 @@ export interface StepState {
   lies: ShapeWord;
   /** sum of σ·h·coverage over the films of a side at 25 °C, N/m; the back includes the ground face */
   filmForce: { front: number; back: number };
-  filmStress: { name: string; side: "front" | "back"; stress: number }[];
+  /** what the figures of this step rest on that nobody stated, a sentence each */
+  remarks: string[];
+  filmStress: FilmHistory[];
+}
+
+/** A film after a step, at 25 °C, with what it has been through. */
+export interface FilmHistory {
+  name: string;
+  side: "front" | "back";
+  /** mean stress, Pa */
+  stress: number;
+  /** strain left by yielding, biaxial, tension positive */
+  plasticStrain: number;
+  /** hottest so far, K */
+  hottest: number;
+  /** whether it has been hot since it came, so that a stress measured before no longer holds for a metal */
+  state: "as deposited" | "after its hottest step";
 }
 
 export interface WalkOptions {
   /** false keeps metals elastic, to show what their history does; default true */
   metalHistory?: boolean;
-}
-
-const FLAT_HOLDINGS: Holding[] = ["grinding tape", "film frame", "edge ring"];
-
-/** Whether what holds the wafer keeps it flat, so that it has no bow of its own at that step. */
-export function heldFlat(holding: Holding): boolean {
-  return FLAT_HOLDINGS.includes(holding);
 }
 
 /**
@@ -46,56 +54,55 @@ export function heldFlat(holding: Holding): boolean {
  */
 export function walkFlow(flow: FlowInput, limits: SiteLimits, options: WalkOptions = {}): { steps: StepState[] } {
   const metalHistory = options.metalHistory ?? true;
-  const { orientation } = flow.wafer;
   let state = initialState(flow);
-  const steps = flow.steps.map((step, index): StepState => {
-    const field = `steps[${index}]`;
-    const before = state;
-    try {
-      const applied = applyStep(before, step, field);
-      const bonded = applied.bond !== null;
-      const flat = heldFlat(step.planned);
-      const hot = settle(applied, orientation, step.peakTemperature, { metalHistory, heldFlat: flat });
-      const cold = settle(hot.state, orientation, ROOM_TEMPERATURE, { metalHistory, heldFlat: flat });
-      state = cold.state;
-      const bare = layersOf(state, orientation, ROOM_TEMPERATURE, { carrier: false });
-      const free = bonded ? solveLaminate(bare.layers, { temperature: ROOM_TEMPERATURE }) : cold.solution;
-      const shape = (at: Settled, temperature: number) =>
-        lyingShape(flow.wafer, at.layers, at.solution, temperature, bonded);
-      const atRoom = flat ? null : shape(cold, ROOM_TEMPERATURE);
-      const heated = step.peakTemperature > ROOM_TEMPERATURE;
-      return {
-        number: index + 1,
-        step,
-        before,
-        after: state,
-        atRoom,
-        atPeak: flat || !heated ? null : shape(hot, step.peakTemperature),
-        released: lyingShape(flow.wafer, bare.layers, free, ROOM_TEMPERATURE, false),
-        lies: shapeWord(atRoom, state.faceUp, limits.flatWithin.value),
-        filmForce: filmForces(state),
-        filmStress: cold.filmStress.map(({ film, stress }) => ({
-          name: film.addition.film.name,
-          side: film.addition.side,
-          stress,
-        })),
-      };
-    } catch (error) {
-      throw error instanceof EngineInputError ? atStep(error, field) : error;
-    }
-  });
+  const steps = flow.steps.map((step, index): StepState =>
+    inStep(index, () => {
+      const before = state;
+      const walked = takeStep(flow.wafer, before, step, { field: stepField(index), metalHistory });
+      state = walked.after;
+      return describe(flow, limits, { number: index + 1, step, before }, walked);
+    }),
+  );
   return { steps };
 }
 
-/** A refusal with the step that it concerns. A curvature is nobody's input, so that one is said by its causes. */
-function atStep({ field, reason, allowed }: EngineInputError, step: string): EngineInputError {
-  if (field.startsWith("steps[")) return new EngineInputError(field, reason, allowed);
-  if (field === "linearCurvature")
-    return new EngineInputError(
-      step,
-      "the films would bend the wafer beyond anything that can be computed. Check their thickness, stress and modulus, and the silicon left",
-    );
-  return new EngineInputError(`${step}.${field}`, reason, allowed);
+function describe(
+  flow: FlowInput,
+  limits: SiteLimits,
+  place: Pick<StepState, "number" | "step" | "before">,
+  walked: WalkedStep,
+): StepState {
+  const { wafer } = flow;
+  const { after } = walked;
+  const atRoom = roomShape(wafer, walked);
+  return {
+    ...place,
+    after,
+    atRoom,
+    atPeak: peakShape(wafer, walked),
+    released: atRoom && !after.bond ? atRoom : releasedShape(wafer, walked),
+    lies: shapeWord(atRoom, after.faceUp, limits.flatWithin.value),
+    filmForce: filmForces(after),
+    remarks: stepRemarks(flow, place.number, place.step, after),
+    filmStress: filmHistories(walked),
+  };
+}
+
+function filmHistories({ after, cold }: WalkedStep): FilmHistory[] {
+  const films = [...after.back.toReversed(), ...after.front];
+  return filmStresses(cold).map(({ stress }, n) => {
+    const film = films[n];
+    if (!film) throw new Error("a settled stack has the films of its state");
+    const { addition, plasticStrain, hottest } = film;
+    return {
+      name: addition.film.name,
+      side: addition.side,
+      stress,
+      plasticStrain,
+      hottest,
+      state: hottest > ROOM_TEMPERATURE ? "after its hottest step" : "as deposited",
+    };
+  });
 }
 
 /** Rigid-substrate force of each side's films as they are now: what they would pull with if the silicon were thick. */
@@ -103,11 +110,9 @@ function filmForces(state: WaferState): StepState["filmForce"] {
   const force = (side: "front" | "back") =>
     allFilms(state)
       .filter(({ addition }) => addition.side === side)
-      .reduce((sum, film) => {
-        const { addition, plasticStrain } = film;
-        const { youngsModulus, poissonsRatio } = addition.film;
-        const modulus = youngsModulus.value / (1 - poissonsRatio.value);
-        return sum + (addition.stress.value - modulus * plasticStrain) * addition.thickness.value * addition.coverage;
+      .reduce((sum, { entry, plasticStrain }) => {
+        const { stress, biaxialModulus, thickness, coverage } = entry.layer;
+        return sum + (stress - biaxialModulus * plasticStrain) * thickness * coverage;
       }, 0);
   return { front: force("front"), back: force("back") + state.groundFaceForce };
 }

@@ -7,9 +7,10 @@ import {
   requireThickness,
   requireWithin,
 } from "../inputs.ts";
+import { checkExpansionCurve, type ExpansionCurve } from "./expansion-curve.ts";
 
-/** Linear expansion: a constant in 1/K, silicon's own curve, or a function of temperature (K) giving 1/K. */
-export type Expansion = number | "silicon" | ((temperature: number) => number);
+/** Linear expansion: a constant in 1/K, silicon's own curve, a stated curve, or a function of temperature (K) giving 1/K. */
+export type Expansion = number | "silicon" | ExpansionCurve | ((temperature: number) => number);
 
 /** One layer of a stack, isotropic in its plane. */
 export interface Layer {
@@ -90,5 +91,10 @@ function checkExpansion(cte: Layer["cte"], field: string): Expansion | null {
   if (cte === undefined) return null;
   if (typeof cte === "number") return requireWithin(`${field}.cte`, cte, -1e-3, 1e-2, "1/K");
   if (cte === "silicon" || typeof cte === "function") return cte;
-  throw new EngineInputError(`${field}.cte`, "is not an expansion", "a number in 1/K, 'silicon' or a function of K");
+  if (typeof cte === "object" && cte !== null) return checkExpansionCurve(cte, `${field}.cte`);
+  throw new EngineInputError(
+    `${field}.cte`,
+    "is not an expansion",
+    "a number in 1/K, 'silicon', a curve or a function of K",
+  );
 }

@@ -1,5 +1,5 @@
 import { EngineInputError } from "../errors.ts";
-import { freeStrain, type NamedLayer } from "./free-strain.ts";
+import type { NamedLayer } from "./free-strain.ts";
 import { checkLayer, ROOM_TEMPERATURE, type Layer } from "./layer.ts";
 import {
   bendingStiffnessOf,
@@ -10,8 +10,12 @@ import {
   strainPerHeightOf,
   stretchingOf,
 } from "./laminate-sums.ts";
+import { placeLayers, type PlacedLayer } from "./placed-layers.ts";
 
-export interface LaminateResult {
+export { findBase } from "./placed-layers.ts";
+
+/** How a stack bends and stretches as a whole. */
+export interface LaminateBalance {
   /** 1/m, positive when the top face (device side) is concave. */
   curvature: number;
   /** Strain of the stack's mid-plane against the flat base at 298.15 K. */
@@ -20,8 +24,20 @@ export interface LaminateResult {
   neutralPlane: number;
   /** Biaxial bending stiffness about the neutral plane, N·m: M h³/12 for one layer. */
   bendingStiffness: number;
+  /** Stretching stiffness, the sum of M h, N/m. */
+  stretchingStiffness: number;
   /** sqrt(12 D/A) with the bending stiffness D and the stretching stiffness A, m: the thickness of one layer for one layer. */
   effectiveThickness: number;
+}
+
+export interface LaminateOptions {
+  /** K, default 298.15 */
+  temperature?: number;
+  /** a second stack on top that slides, bottom to top */
+  slidingOn?: readonly Layer[];
+}
+
+export interface LaminateResult extends LaminateBalance {
   /** Free strain of each layer, as by `layerFreeStrain`. */
   freeStrain: number[];
   /** Stress in each layer itself at its lower face, Pa. */
@@ -42,24 +58,50 @@ export interface LaminateResult {
  * expands as silicon, else the thickest. The curvature holds while the slope stays small; whether the wafer can follow it
  * is a question for `freeWaferShape`. Bad input throws `EngineInputError` naming the layer.
  *
+ * `slidingOn` is a second stack that lies on the first and slides on it without friction, as on an adhesive that has become a
+ * liquid: both take one curvature, each stays free of force, so their bending stiffnesses add and so do the moments that each
+ * would bend itself with. Strains and stresses are those of the first stack; base and zero of strain too.
+ *
  * Source: Townsend, Barnett and Brunner 1987; Hsueh 2002; Hsueh, Lee and Chuang 2003. Two layers: Freund, Floro and Chason 1999.
+ * Sliding: own derivation.
  */
-export function solveLaminate(layersBottomToTop: readonly Layer[], o: { temperature?: number } = {}): LaminateResult {
+export function solveLaminate(layersBottomToTop: readonly Layer[], o: LaminateOptions = {}): LaminateResult {
+  const named = layersBottomToTop.map((layer, n): NamedLayer => {
+    const field = `layers[${n}]`;
+    return { layer: checkLayer(layer, field), field };
+  });
   const temperature = o.temperature ?? ROOM_TEMPERATURE;
-  const layers = place(layersBottomToTop, temperature);
-  const { stretching, neutralPlane, meanStrain, bendingStiffness, strainPerHeight } = bend(layers);
+  const layers = placeLayers(named, temperature);
+  const balance = balanceLayers(layers, o.slidingOn ? solveLaminate(o.slidingOn, { temperature }) : undefined);
   const stressAt = (l: PlacedLayer, z: number) =>
-    l.biaxialModulus * (meanStrain - l.freeStrain + strainPerHeight * (z - neutralPlane));
+    l.biaxialModulus * (balance.midplaneStrain - balance.curvature * z - l.freeStrain);
+  return {
+    ...balance,
+    freeStrain: layers.map((l) => l.freeStrain),
+    stressBottom: layers.map((l) => stressAt(l, l.centre - l.thickness / 2)),
+    stressTop: layers.map((l) => stressAt(l, l.centre + l.thickness / 2)),
+    meanStress: layers.map((l) => stressAt(l, l.centre)),
+  };
+}
+
+/** A stack that takes the same curvature as another and slides on it. */
+export type SlidingPlate = Pick<LaminateBalance, "curvature" | "bendingStiffness" | "stretchingStiffness">;
+
+/** The part of `solveLaminate` that concerns the stack as a whole, for layers that are checked and placed already. */
+export function balanceLayers(layers: readonly PlacedLayer[], slidingOn?: SlidingPlate): LaminateBalance {
+  const { neutralPlane, meanStrain, ...alone } = bend(layers);
+  const moment =
+    alone.strainPerHeight * alone.bendingStiffness - (slidingOn ? slidingOn.bendingStiffness * slidingOn.curvature : 0);
+  const bendingStiffness = alone.bendingStiffness + (slidingOn?.bendingStiffness ?? 0);
+  const stretching = alone.stretching + (slidingOn?.stretchingStiffness ?? 0);
+  const strainPerHeight = slidingOn ? moment / bendingStiffness : alone.strainPerHeight;
   return {
     curvature: strainPerHeight === 0 ? 0 : -strainPerHeight,
     midplaneStrain: meanStrain - strainPerHeight * neutralPlane,
     neutralPlane,
     bendingStiffness,
+    stretchingStiffness: stretching,
     effectiveThickness: Math.sqrt((12 * bendingStiffness) / stretching),
-    freeStrain: layers.map((l) => l.freeStrain),
-    stressBottom: layers.map((l) => stressAt(l, l.centre - l.thickness / 2)),
-    stressTop: layers.map((l) => stressAt(l, l.centre + l.thickness / 2)),
-    meanStress: layers.map((l) => stressAt(l, l.centre)),
   };
 }
 
@@ -68,13 +110,20 @@ export function solveLaminate(layersBottomToTop: readonly Layer[], o: { temperat
  * that nothing large cancels for a thin film on a wafer.
  */
 function bend(layers: readonly PlacedLayer[]) {
-  const thickness = Float64Array.from(layers, (l) => l.thickness);
-  const modulus = Float64Array.from(layers, (l) => l.coveredModulus);
-  const bottom = -sum(layers, (l) => l.thickness) / 2;
-  const sums = new Float64Array(LAMINATE_SUMS);
+  const count = layers.length;
+  if (scratch.thickness.length < count) scratch = columns(2 * count);
+  const { thickness, modulus, pressure, sums } = scratch;
+  let total = 0;
+  layers.forEach((l, n) => {
+    thickness[n] = l.thickness;
+    modulus[n] = l.coveredModulus;
+    total += l.thickness;
+  });
   const sumAbout = (plane: number, strain: number) => {
-    const pressure = Float64Array.from(layers, (l) => l.coveredModulus * (l.freeStrain - strain));
-    laminateSums(layers.length, thickness, 0, modulus, pressure, bottom - plane, sums);
+    layers.forEach((l, n) => {
+      pressure[n] = l.coveredModulus * (l.freeStrain - strain);
+    });
+    laminateSums(count, thickness, 0, modulus, pressure, -total / 2 - plane, sums);
   };
   sumAbout(0, 0);
   const stretching = stretchingOf(sums);
@@ -93,47 +142,14 @@ function bend(layers: readonly PlacedLayer[]) {
   };
 }
 
-interface PlacedLayer {
-  thickness: number;
-  biaxialModulus: number;
-  /** Biaxial modulus times area fraction, Pa. */
-  coveredModulus: number;
-  /** Height of the layer's middle over the mid-plane of the stack, m. */
-  centre: number;
-  freeStrain: number;
-}
+/** Columns that `bend` fills anew each time: a flow solves tens of thousands of stacks, and new ones would cost more than the sums. */
+let scratch = columns(64);
 
-function place(layersBottomToTop: readonly Layer[], temperature: number): PlacedLayer[] {
-  const named: NamedLayer[] = layersBottomToTop.map((layer, n) => {
-    const field = `layers[${n}]`;
-    return { layer: checkLayer(layer, field), field };
-  });
-  const base = findBase(named);
-  const total = sum(named, ({ layer }) => layer.thickness);
-  let below = 0;
-  return named.map((entry) => {
-    const { thickness, biaxialModulus, coverage } = entry.layer;
-    const centre = below + thickness / 2 - total / 2;
-    below += thickness;
-    return {
-      thickness,
-      biaxialModulus,
-      coveredModulus: biaxialModulus * coverage,
-      centre,
-      freeStrain: freeStrain(entry, base, temperature),
-    };
-  });
-}
-
-/** The layer whose flat state is the zero of strain: the first that expands as silicon, else the thickest. */
-export function findBase(layers: NamedLayer[]): NamedLayer {
-  const silicon = layers.find(({ layer }) => layer.cte === "silicon");
-  if (silicon) return silicon;
-  const [first, ...rest] = layers;
-  if (!first) throw new EngineInputError("layers", "the stack is empty", "at least one layer");
-  return rest.reduce((thickest, next) => (next.layer.thickness > thickest.layer.thickness ? next : thickest), first);
-}
-
-function sum<T>(items: readonly T[], of: (item: T) => number): number {
-  return items.reduce((total, item) => total + of(item), 0);
+function columns(size: number) {
+  return {
+    thickness: new Float64Array(size),
+    modulus: new Float64Array(size),
+    pressure: new Float64Array(size),
+    sums: new Float64Array(LAMINATE_SUMS),
+  };
 }

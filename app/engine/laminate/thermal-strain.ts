@@ -1,11 +1,12 @@
 import { EngineInputError } from "../errors.ts";
 import { requireTemperature } from "../inputs.ts";
 import { siliconThermalStrain } from "../silicon/expansion.ts";
+import { curveStrain } from "./expansion-curve.ts";
 import type { Expansion } from "./layer.ts";
 
 /**
  * Free thermal strain between two temperatures (K), positive on heating with a positive coefficient. A constant is multiplied
- * out, silicon uses its closed integral (120 to 1500 K), a function is integrated to 1e-10 of the strain. `field` names the
+ * out, silicon uses its closed integral (120 to 1500 K), a stated curve is integrated piece by piece, a function is integrated to 1e-10 of the strain. `field` names the
  * expansion in errors.
  */
 export function thermalStrain(cte: Expansion, from: number, to: number, field = "cte"): number {
@@ -14,6 +15,7 @@ export function thermalStrain(cte: Expansion, from: number, to: number, field = 
   if (t0 === t1) return 0;
   if (cte === "silicon") return siliconThermalStrain(t0, t1);
   if (typeof cte === "number") return cte * (t1 - t0);
+  if (typeof cte === "object") return curveStrain(cte, t0, t1, field);
   const coefficient = checked(cte, field);
   const [low, high, sign] = t0 < t1 ? [t0, t1, 1] : [t1, t0, -1];
   return sign * integrate(coefficient, low, high);

@@ -1,9 +1,10 @@
 import type { Working, WorkingLine } from "../working.ts";
 import { ROOM_TEMPERATURE, type Layer } from "./layer.ts";
-import { solveLaminate } from "./solve-laminate.ts";
+import { solveLaminate, type LaminateOptions } from "./solve-laminate.ts";
 
 /** The curvature of `solveLaminate` as data: for each layer, bottom to top, what went into the sums. */
-export function laminateWorking(layersBottomToTop: readonly Layer[], o: { temperature?: number } = {}): Working {
+export function laminateWorking(layersBottomToTop: readonly Layer[], o: LaminateOptions = {}): Working {
+  if (o.slidingOn) return slidingPairWorking(layersBottomToTop, o.slidingOn, o.temperature);
   const solved = solveLaminate(layersBottomToTop, o);
   const temperature: WorkingLine = {
     symbol: "T",
@@ -20,6 +21,31 @@ export function laminateWorking(layersBottomToTop: readonly Layer[], o: { temper
     ],
     result: { symbol: "κ", meaning: "curvature, bowl positive", value: solved.curvature, unit: "1/m" },
     note: "Layers are counted from the bottom, device side on top.",
+  };
+}
+
+function slidingPairWorking(lower: readonly Layer[], upper: readonly Layer[], temperature?: number): Working {
+  const at = temperature === undefined ? {} : { temperature };
+  const plates = [lower, upper].map((layers) => ({ layers, solved: solveLaminate(layers, at) }));
+  return {
+    equation: "sliding-pair",
+    inputs: plates.flatMap(({ solved }, n): WorkingLine[] => [
+      { symbol: `κ_${n + 1}`, meaning: `curvature of plate ${n + 1} by itself`, value: solved.curvature, unit: "1/m" },
+      {
+        symbol: `D_${n + 1}`,
+        meaning: `bending stiffness of plate ${n + 1}`,
+        value: solved.bendingStiffness,
+        unit: "N·m",
+      },
+    ]),
+    result: {
+      symbol: "κ",
+      meaning: "curvature of both, bowl positive",
+      value: solveLaminate(lower, { ...at, slidingOn: upper }).curvature,
+      unit: "1/m",
+    },
+    note: "The adhesive is above its flow point and carries no shear. Plate 1 is the wafer, plate 2 the carrier.",
+    from: plates.map(({ layers }) => laminateWorking(layers, at)),
   };
 }
 

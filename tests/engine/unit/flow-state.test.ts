@@ -93,7 +93,7 @@ describe("the wafer between steps", () => {
 
   it("lays the damaged depth of a ground face into the silicon, not on top of it", () => {
     const ground = after([tapeStep(), grindStep(100, 3, { groundFaceForce: exact(-60) })]);
-    const { layers } = layersOf(ground, "100", 298.15, { carrier: false });
+    const layers = layersOf(ground, 298.15, { carrier: false }).entries.map(({ stated }) => stated);
     expect(layers.reduce((sum, { thickness }) => sum + thickness, 0)).toBeCloseTo(um(100), 12);
     const force = layers.reduce(
       (sum, { stress, thickness }) => sum + (typeof stress === "number" ? stress : 0) * thickness,

@@ -1,0 +1,55 @@
+import { ROOM_TEMPERATURE } from "../laminate/layer.ts";
+import { siliconThermalStrain } from "../silicon/expansion.ts";
+import type { BondingMaterialInput, BondInput } from "./model.ts";
+
+/** State of rest of a pair: where adhesive and carrier carry nothing while the wafer has its own shape. */
+export interface BondRest {
+  /** K */
+  temperature: number;
+  /** strain of adhesive and carrier beyond that of flat, free silicon at that temperature */
+  adhesiveStrain: number;
+  carrierStrain: number;
+}
+
+/** A bond as it is: what joins the pair, the temperature at which it was made, and how it has locked since. */
+export interface BondState extends BondInput {
+  bondTemperature: number;
+  /** from the last time that it slid and locked again; absent while it rests as it was bonded */
+  rest?: BondRest;
+}
+
+/** Temperature, K, above which a bonding material is a rubber; null when it has none in the range used. */
+export function glassTransition({ glassTransition: stated, softening }: BondingMaterialInput): number | null {
+  return (stated ?? softening)?.value ?? null;
+}
+
+/** Temperature, K, from which the plates slide; null for a cross-linked material and where nobody stated it. */
+export function flowPoint({ flows, flowPoint: stated }: BondingMaterialInput): number | null {
+  return flows ? (stated?.value ?? null) : null;
+}
+
+/** Whether the plates of a bond slide at a temperature (K). */
+export function slides(bond: BondState | null, temperature: number): boolean {
+  const from = bond ? flowPoint(bond.material) : null;
+  return from !== null && temperature >= from;
+}
+
+/**
+ * Temperature at which the pair was last at rest: that of bonding or, if lower, the flow point or else the glass transition,
+ * below which the material transmits mismatch (common practice, no source).
+ */
+export function lockTemperature({ rest, material, bondTemperature }: BondState): number {
+  if (rest) return rest.temperature;
+  return Math.min(bondTemperature, flowPoint(material) ?? glassTransition(material) ?? Infinity);
+}
+
+/**
+ * The bond locked at a temperature (K) in the shape that the sliding pair has there: `strain` of the wafer, continued to the
+ * middles of adhesive and carrier, against flat silicon at 25 °C. Curvature goes into that of the adhesive as its middle alone,
+ * which leaves out its own bending stiffness, a millionth of the pair's.
+ */
+export function locked(bond: BondState, temperature: number, strain: { adhesive: number; carrier: number }): BondState {
+  const silicon = siliconThermalStrain(ROOM_TEMPERATURE, temperature);
+  const rest = { temperature, adhesiveStrain: strain.adhesive - silicon, carrierStrain: strain.carrier - silicon };
+  return { ...bond, rest };
+}

@@ -1,0 +1,49 @@
+import { ROOM_TEMPERATURE } from "../laminate/layer.ts";
+import { formatQuantity } from "../units/format.ts";
+import { lockTemperature } from "./bond.ts";
+import { knownBetween } from "./carrier-expansion.ts";
+import type { FlowInput, StepInput } from "./model.ts";
+import type { WaferState } from "./state.ts";
+
+/** Ranges start at 20, 25 or 30 °C without meaning a difference, K (common practice, no source). */
+const RANGE_SLACK = 5;
+
+const celsius = (kelvin: number) => formatQuantity(kelvin, "temperature", { unit: "°C", decimals: 0 });
+
+/** What a step's figures rest on that nobody stated, a sentence each. */
+export function stepRemarks(flow: FlowInput, number: number, step: StepInput, after: WaferState): string[] {
+  return [
+    ...unstatedFlowPoint(step, after),
+    ...beyondKnownExpansion(step, after),
+    ...incomingTakenAsFilm(flow, number),
+  ];
+}
+
+function beyondKnownExpansion({ peakTemperature }: StepInput, { bond }: WaferState): string[] {
+  const known = bond && knownBetween(bond.carrier);
+  if (!known) return [];
+  const outside = [lockTemperature(bond), peakTemperature, ROOM_TEMPERATURE].filter(
+    (temperature) => temperature < known.from - RANGE_SLACK || temperature > known.to + RANGE_SLACK,
+  );
+  if (outside.length === 0) return [];
+  const where = [...new Set(outside)].map(celsius).join(", ");
+  return [
+    `The expansion of ${bond.carrier.name} is stated for ${celsius(known.from)} to ${celsius(known.to)} and used at ${where}.`,
+  ];
+}
+
+function unstatedFlowPoint({ peakTemperature }: StepInput, { bond }: WaferState): string[] {
+  if (!bond?.material.flows || bond.material.flowPoint) return [];
+  const { name, softening } = bond.material;
+  if (softening === null || peakTemperature < softening.value) return [];
+  return [
+    `${name} is a thermoplastic without a flow point: above ${celsius(softening.value)} its plates are taken not to slide, and the pair keeps its state of rest.`,
+  ];
+}
+
+function incomingTakenAsFilm({ wafer: { incoming } }: FlowInput, number: number): string[] {
+  if (number !== 1 || !incoming || incoming.filmShare !== null) return [];
+  return [
+    "Nobody said which part of the incoming shape films cause: all of it is taken as film, which grows as 1/h^2 when the wafer is thinned.",
+  ];
+}

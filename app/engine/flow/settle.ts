@@ -1,0 +1,112 @@
+import { flowStrains, type StressBound } from "../laminate/bounded-stress.ts";
+import type { Layer } from "../laminate/layer.ts";
+import { letFlow, placeLayers, type PlacedLayer } from "../laminate/placed-layers.ts";
+import { balanceLayers, type LaminateBalance } from "../laminate/solve-laminate.ts";
+import { stressBound } from "./film-limits.ts";
+import { locked, slides } from "./bond.ts";
+import { carrierPlate, layersOf, type LayerStack } from "./layers.ts";
+import type { StackEntry } from "./stack-entry.ts";
+import type { FilmState, WaferState } from "./state.ts";
+
+/** A stack at a temperature, its layers at their heights with what they have flowed. */
+export interface PlacedStack extends LayerStack {
+  placed: PlacedLayer[];
+}
+
+export interface Settled extends PlacedStack {
+  state: WaferState;
+  temperature: number;
+  heldFlat: boolean;
+  solution: LaminateBalance;
+  /** the carrier when it slides on the wafer; `entries` are those of the wafer then */
+  slidingOn: StackEntry[] | null;
+}
+
+export interface SettleOptions {
+  /** false keeps every metal elastic */
+  metalHistory: boolean;
+  /** true for a wafer on tape or frame: its films are stressed as in a flat stack, `solution` is that of the stack let go */
+  heldFlat: boolean;
+}
+
+/** The layers of a stack with the strains that they have flowed, for a working. */
+export function statedLayers({ entries, placed }: PlacedStack): Layer[] {
+  return entries.map(({ stated }, at) => {
+    const plasticStrain = placed[at]?.flowed ?? 0;
+    return plasticStrain === 0 ? stated : { ...stated, plasticStrain };
+  });
+}
+
+/**
+ * The laminate at a temperature with its films at their limits: a metal beyond its yield stress flows and keeps the strain
+ * (kinematic: on reversal it answers elastically over twice the yield stress); a polymer stops at zero stress and keeps
+ * nothing. All films are solved together inside the laminate, exactly. A bonding material at its flow point lets carrier and
+ * wafer slide: they share one curvature and nothing else.
+ */
+export function settle(state: WaferState, temperature: number, { metalHistory, heldFlat }: SettleOptions): Settled {
+  const sliding = state.bond !== null && slides(state.bond, temperature);
+  const slidingOn = state.bond && sliding ? carrierPlate(state.bond) : null;
+  const plate = slidingOn ? balanceLayers(placeLayers(slidingOn, temperature)) : undefined;
+  const stack = placeStack(layersOf(state, temperature, { carrier: !sliding }), temperature);
+  const { placed, films } = stack;
+  const bounds: StressBound[] = [];
+  films.forEach((film, at) => {
+    const layer = placed[at];
+    const bound = film && layer ? stressBound(film.addition, layer, temperature, metalHistory) : null;
+    if (bound) bounds.push(bound);
+  });
+  let solution = balanceLayers(placed, plate);
+  const strains = flowStrains(placed, bounds, solution, { heldFlat, slidingOn: plate });
+  if (strains) {
+    bounds.forEach(({ layer }, n) => letFlow(layer, strains[n] ?? 0));
+    solution = balanceLayers(placed, plate);
+  }
+  const back = state.back.map((film, n) => renewed(film, temperature, placed[state.back.length - 1 - n]));
+  const firstFront = state.back.length + state.siliconEntries.length;
+  const front = state.front.map((film, n) => renewed(film, temperature, placed[firstFront + n]));
+  return { ...stack, state: { ...state, back, front }, temperature, heldFlat, solution, slidingOn };
+}
+
+/** The layers of a stack at a temperature (K), with what its films have flowed so far. */
+export function placeStack(stack: LayerStack, temperature: number): PlacedStack {
+  const placed = placeLayers(stack.entries, temperature);
+  stack.films.forEach((film, at) => {
+    const layer = placed[at];
+    if (layer && film && film.plasticStrain !== 0) letFlow(layer, film.plasticStrain);
+  });
+  return { ...stack, placed };
+}
+
+/** Mean stress of each film, Pa: as the stack lies by itself, or with its bending taken out by what holds it flat. */
+export function filmStresses({ placed, films, solution, heldFlat }: Settled): { film: FilmState; stress: number }[] {
+  const { midplaneStrain, curvature, neutralPlane } = solution;
+  return films.flatMap((film, at) => {
+    const layer = placed[at];
+    if (!film || !layer) return [];
+    const strain = midplaneStrain - curvature * (heldFlat ? neutralPlane : layer.centre);
+    return [{ film, stress: layer.biaxialModulus * (strain - layer.freeStrain) }];
+  });
+}
+
+/** The film after it has been at a temperature: a metal keeps what it has flowed. The same object when nothing changed. */
+function renewed(film: FilmState, temperature: number, layer: PlacedLayer | undefined): FilmState {
+  const { addition, entry } = film;
+  const plasticStrain = addition.film.kind === "metal" && layer ? layer.flowed : film.plasticStrain;
+  if (plasticStrain === film.plasticStrain && temperature <= film.hottest) return film;
+  return { addition, entry, plasticStrain, hottest: Math.max(film.hottest, temperature) };
+}
+
+/**
+ * The wafer of a sliding pair once it has cooled to its flow point and locks in the shape that it has there: flat where a tool
+ * holds it flat.
+ */
+export function lockedState({ state, placed, solution, temperature }: Settled, flat: boolean): WaferState {
+  if (!state.bond) return state;
+  const { midplaneStrain, curvature, neutralPlane } = solution;
+  const top = placed.reduce((sum, { thickness }) => sum + thickness, 0) / 2;
+  const adhesive = top + state.bond.thickness.value / 2;
+  const carrier = top + state.bond.thickness.value + state.bond.carrier.thickness.value / 2;
+  const strainAt = (z: number) => midplaneStrain - curvature * (flat ? neutralPlane : z);
+  const bond = locked(state.bond, temperature, { adhesive: strainAt(adhesive), carrier: strainAt(carrier) });
+  return { ...state, bond };
+}

@@ -1,0 +1,112 @@
+import { EngineInputError } from "../errors.ts";
+import { ROOM_TEMPERATURE } from "../laminate/layer.ts";
+import { balanceLayers } from "../laminate/solve-laminate.ts";
+import type { Holding } from "../vocabulary.ts";
+import { flowPoint, slides } from "./bond.ts";
+import { bendsUnequally, layersOf } from "./layers.ts";
+import type { FlowInput, StepInput } from "./model.ts";
+import { lockedState, placeStack, settle, statedLayers, type Settled, type SettleOptions } from "./settle.ts";
+import { lyingShape, type LyingShape } from "./shape.ts";
+import { unequalCurvature } from "./unequal.ts";
+import { applyStep, type WaferState } from "./state.ts";
+
+type Wafer = FlowInput["wafer"];
+
+/** A step as it was walked, before anybody asks for a shape. */
+export interface WalkedStep {
+  after: WaferState;
+  /** at the hottest of the step, and at 25 °C after it; one and the same for a step at room temperature */
+  hot: Settled;
+  cold: Settled;
+  /** whether tape or frame keeps it flat, so that it has no bow of its own */
+  flat: boolean;
+}
+
+const FLAT_HOLDINGS: Holding[] = ["grinding tape", "film frame", "edge ring"];
+
+/** Whether what holds the wafer keeps it flat, so that it has no bow of its own at that step. */
+export function heldFlat(holding: Holding): boolean {
+  return FLAT_HOLDINGS.includes(holding);
+}
+
+/** What a step does to the wafer: it changes, is heated, and cools to 25 °C. */
+export function takeStep(
+  wafer: Wafer,
+  before: WaferState,
+  step: StepInput,
+  { field, metalHistory }: { field: string; metalHistory: boolean },
+): WalkedStep {
+  const applied = applyStep(before, step, field);
+  const flat = heldFlat(step.planned);
+  const options = { metalHistory, heldFlat: flat };
+  const hot = settle(applied, step.peakTemperature, options);
+  const cooling = slides(applied.bond, step.peakTemperature) ? relock(before, hot, step, options) : hot.state;
+  const cold = step.peakTemperature === ROOM_TEMPERATURE ? hot : settle(cooling, ROOM_TEMPERATURE, options);
+  return { after: cold.state, hot, cold, flat };
+}
+
+/**
+ * A pair that has slid, cooled to where it locks. One that is bonded in this step is pressed flat while it cools, and rests flat
+ * on the silicon; one that was bonded before locks as it lies, flat on a tool that holds it flat.
+ */
+function relock(before: WaferState, hot: Settled, step: StepInput, options: SettleOptions): WaferState {
+  const from = hot.state.bond ? flowPoint(hot.state.bond.material) : null;
+  if (!before.bond || from === null) return hot.state;
+  const flat = options.heldFlat || step.equipment?.atPeak === "held";
+  return lockedState(settle(hot.state, from, { ...options, heldFlat: flat }), flat);
+}
+
+/** Shape at 25 °C after the step as it lies on the tool; null when tape or frame holds it flat. */
+export function roomShape(wafer: Wafer, { after, cold, flat }: WalkedStep): LyingShape | null {
+  return flat ? null : settledShape(wafer, cold, after.bond !== null);
+}
+
+/** Shape at the hottest of the step; null at room temperature or when tape or frame holds it flat. */
+export function peakShape(wafer: Wafer, { after, hot, flat }: WalkedStep): LyingShape | null {
+  return flat || hot.temperature <= ROOM_TEMPERATURE ? null : settledShape(wafer, hot, after.bond !== null);
+}
+
+/** Shape at 25 °C as it would lie if nothing held it. */
+export function releasedShape(wafer: Wafer, { after, cold }: WalkedStep): LyingShape {
+  if (!after.bond) return settledShape(wafer, cold, false);
+  const temperature = ROOM_TEMPERATURE;
+  const stack = placeStack(layersOf(after, temperature, { carrier: false }), temperature);
+  const solution = balanceLayers(stack.placed);
+  const unequal = bendsUnequally(after) ? unequalCurvature(stack, temperature, null) : undefined;
+  return lyingShape(wafer, { layers: () => statedLayers(stack), solution, temperature, bonded: false, unequal });
+}
+
+function settledShape(wafer: Wafer, settled: Settled, bonded: boolean): LyingShape {
+  const { solution, temperature, state } = settled;
+  return lyingShape(wafer, {
+    layers: () => statedLayers(settled),
+    solution,
+    temperature,
+    bonded,
+    slidingOn: settled.slidingOn?.map(({ stated }) => stated),
+    unequal: bendsUnequally(state) ? unequalCurvature(settled, temperature, settled.slidingOn) : undefined,
+  });
+}
+
+/** How errors name a step, by its index. */
+export function stepField(index: number): string {
+  return `steps[${index}]`;
+}
+
+/** Runs what belongs to a step, so that a refusal names it. A curvature is nobody's input, so that one is said by its causes. */
+export function inStep<T>(index: number, run: () => T): T {
+  const step = stepField(index);
+  try {
+    return run();
+  } catch (error) {
+    if (!(error instanceof EngineInputError)) throw error;
+    const { field, reason, allowed } = error;
+    if (field.startsWith("steps[")) throw error;
+    if (field === "linearCurvature")
+      throw new EngineInputError(
+        step,
+        "the films would bend the wafer beyond anything that can be computed. Check their thickness, stress and modulus, and the silicon left",
+      );
+    throw new EngineInputError(`${step}.${field}`, reason, allowed);
+  }
+}
