@@ -2,19 +2,21 @@ import { provenance } from "../measured.ts";
 import type { StepState } from "../flow/walk.ts";
 import { formatQuantity } from "../units/format.ts";
 import type { Outcome } from "../vocabulary.ts";
-import { againstUpperLimit, reaches } from "./against-limit.ts";
+import { bondBudget } from "./bond-budget.ts";
+import { bondChemistry } from "./bond-chemistry.ts";
+import { againstUpperLimit, exceeds, reaches } from "./against-limit.ts";
 import type { Finding, Rule, RuleContext } from "./finding.ts";
+import { celsius, duration } from "./words.ts";
 
-const TITLE = "Bonding material and temperature";
-
-const celsius = (kelvin: number) => formatQuantity(kelvin, "temperature", { unit: "°C", decimals: 0 });
+const TITLE = "Bonding material";
 
 /** The bond that the step's heat acts on: the one it comes with, not the one that this step makes or has just let go. */
 function bondUnderHeat(state: StepState) {
   return state.step.kind === "bond" || state.step.kind === "debond" ? null : state.before.bond;
 }
 
-function judge({ limits }: RuleContext, state: StepState): Finding[] {
+function judge(context: RuleContext, state: StepState): Finding[] {
+  const { limits } = context;
   const bond = bondUnderHeat(state);
   if (!bond) return [];
   const { material } = bond;
@@ -45,9 +47,29 @@ function judge({ limits }: RuleContext, state: StepState): Finding[] {
   const findings = [againstTemperatureLimit(peak, material.name, material.temperatureLimit.value, margin, make)];
   if (material.softening && reaches(peak, material.softening.value))
     findings.push(aboveSoftening(state, material, make));
-  return findings;
+  const tooLong = beyondHoldTime(state, material, margin, make);
+  if (tooLong) findings.push(tooLong);
+  return [...findings, ...bondChemistry(context, state, material), ...bondBudget(context, state, material)];
 }
 
+/** A temperature limit holds for a time: near it, a longer hold is more than was tried. */
+function beyondHoldTime(
+  { step }: StepState,
+  { name, temperatureLimit, limitTime }: BondMaterial,
+  margin: number,
+  make: MakeFinding,
+): Finding | null {
+  if (!limitTime || step.holdTime === null || !reaches(step.peakTemperature, temperatureLimit.value - margin))
+    return null;
+  if (!exceeds(step.holdTime, limitTime.value)) return null;
+  return make(
+    "do not run",
+    `${duration(step.holdTime)} near its limit; ${name} stands that for ${duration(limitTime.value)}.`,
+    "Shorten the hold, lower the peak, or bond with a material that takes more.",
+  );
+}
+
+type BondMaterial = NonNullable<StepState["before"]["bond"]>["material"];
 type MakeFinding = (outcome: Outcome, reason: string, remedy: string | null) => Finding;
 
 function againstTemperatureLimit(
@@ -70,11 +92,7 @@ function againstTemperatureLimit(
   return make("do not run", `${figures}.`, remedy);
 }
 
-function aboveSoftening(
-  state: StepState,
-  material: NonNullable<StepState["before"]["bond"]>["material"],
-  make: MakeFinding,
-): Finding {
+function aboveSoftening(state: StepState, material: BondMaterial, make: MakeFinding): Finding {
   const peak = state.step.peakTemperature;
   const above = `${celsius(peak)} reaches the softening point of ${material.name}, ${celsius(material.softening?.value ?? peak)}`;
   if (!material.flows) return make("clear", `${above}: it is cross-linked, stays coupled and does not flow.`, null);
@@ -94,7 +112,7 @@ function aboveSoftening(
 export const adhesiveRule: Rule = {
   number: 6,
   title: TITLE,
-  asks: "Does the bonding material stay below its temperature limit with its margin, and below the point where it flows, at every step between bond and debond?",
-  limits: ["adhesiveMargin"],
+  asks: "Does the bonding material stay below its temperature limit with its margin and hold time, and below the point where it flows; does it stand the vacuum, chemicals and light of every step between bond and debond, and all their heat together?",
+  limits: ["adhesiveMargin", "weightLossClear", "weightLoss", "heatingFrom"],
   judge,
 };
