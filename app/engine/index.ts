@@ -135,6 +135,8 @@ export { bumpCoverWorking, thicknessBudgetWorking } from "./thickness-budget/wor
 export { dieAfterDicing, type DieAfterDicing, type DieAtTemperature, type DieInput } from "./die/die-after-dicing.ts";
 export { dieWarpWorking } from "./die/working.ts";
 
+export { rankBendingSteps, type RankedStep } from "./rules/rank-bending.ts";
+
 // What the handling rules ask beyond the physics
 export {
   CLAMPINGS,

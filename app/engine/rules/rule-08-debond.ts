@@ -3,7 +3,7 @@ import { ROOM_TEMPERATURE } from "../laminate/layer.ts";
 import { supportRank } from "../vocabulary.ts";
 import { againstUpperLimit, exceeds } from "./against-limit.ts";
 import type { Finding, Rule, RuleContext } from "./finding.ts";
-import { findingsOf, siteLimit, statedLimit, temperatureFigure } from "./make-finding.ts";
+import { findingsOf, statedLimit, temperatureFigure } from "./make-finding.ts";
 import { peel } from "./peel.ts";
 import { againstExposures } from "./resistance.ts";
 import { requiredAt, thinnest } from "./rule-01-thickness.ts";

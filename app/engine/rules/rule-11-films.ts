@@ -2,7 +2,6 @@ import type { FilmInput } from "../flow/model.ts";
 import { allFilms } from "../flow/state.ts";
 import type { StepState } from "../flow/walk.ts";
 import { ROOM_TEMPERATURE } from "../laminate/layer.ts";
-import type { Measured } from "../measured.ts";
 import { outcomeRank } from "../vocabulary.ts";
 import { againstUpperLimit, exceeds, reaches } from "./against-limit.ts";
 import type { Finding, Rule, RuleContext } from "./finding.ts";

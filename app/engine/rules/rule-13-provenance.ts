@@ -1,9 +1,9 @@
-import { EngineInputError } from "../errors.ts";
 import type { FilmAddition } from "../flow/model.ts";
 import { solderMelting } from "./solder.ts";
 import type { StepState } from "../flow/walk.ts";
 import { provenance } from "../measured.ts";
 import { againstUpperLimit } from "./against-limit.ts";
+import { dayOf } from "./calendar.ts";
 import type { Finding, Rule, RuleContext } from "./finding.ts";
 import { findingsOf, siteLimit } from "./make-finding.ts";
 import { micrometres, percent } from "./words.ts";
@@ -11,14 +11,10 @@ import { micrometres, percent } from "./words.ts";
 const TITLE = "Where stresses come from";
 const make = findingsOf(13, TITLE);
 
-/** Mean month, s. */
-const MONTH = (365.25 / 12) * 86400;
+const DAY = 86400;
 
-function dateOf(field: string, text: string): number {
-  const time = Date.parse(text);
-  if (!Number.isFinite(time)) throw new EngineInputError(field, `'${text}' is not a date`, "YYYY-MM-DD");
-  return time / 1000;
-}
+/** Mean month, s. */
+const MONTH = (365.25 / 12) * DAY;
 
 function faults({ flow, limits }: RuleContext, state: StepState, addition: FilmAddition, at: number): Finding[] {
   const { film, stress, stressRecord: record } = addition;
@@ -33,7 +29,7 @@ function faults({ flow, limits }: RuleContext, state: StepState, addition: FilmA
     );
   const on = record?.on ?? stress.on ?? null;
   if (on && flow.assessedOn) {
-    const age = dateOf("assessedOn", flow.assessedOn) - dateOf(field, on);
+    const age = DAY * (dayOf("assessedOn", flow.assessedOn) - dayOf(field, on));
     const outcome = againstUpperLimit(age, limits.recordAge.value, 0, "caution");
     if (outcome !== "clear")
       found.push(
