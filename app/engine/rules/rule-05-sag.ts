@@ -4,6 +4,7 @@ import type { Support } from "../gravity/support.ts";
 import { gravitySagWorking } from "../gravity/working.ts";
 import type { Clamping } from "../flow/handling-inputs.ts";
 import type { LyingShape } from "../flow/shape.ts";
+import type { WaferState } from "../flow/state.ts";
 import type { StepState } from "../flow/walk.ts";
 import { SILICON_DENSITY } from "../silicon/density.ts";
 import { formatNumber } from "../units/format-number.ts";
@@ -139,11 +140,20 @@ function weighing({ flow }: RuleContext, state: StepState): Finding[] {
   ];
 }
 
-function measuring(state: StepState, shape: LyingShape): Finding[] {
+/** Silicon, films at their full height, bonding materials and carriers, m. */
+function totalThickness({ silicon, bond, transfer, ...wafer }: WaferState): number {
+  const films = [...wafer.front, ...wafer.back].reduce((sum, { addition }) => sum + addition.thickness.value, 0);
+  return [bond, transfer].reduce(
+    (sum, pair) => sum + (pair ? pair.thickness.value + pair.carrier.thickness.value : 0),
+    silicon.value + films,
+  );
+}
+
+function measuring(state: StepState): Finding[] {
   const tool = state.step.equipment;
   if (!tool?.totalThicknessLimit) return [];
   const limit: FindingLimit = statedLimit(`${tool.name}, total thickness`, tool.totalThicknessLimit, "m");
-  const total = shape.layers.reduce((sum, { thickness }) => sum + thickness, 0);
+  const total = totalThickness(state.after);
   const outcome = againstUpperLimit(total, limit.value, 0, "do not run");
   return [
     make(state, outcome, `It is ${millimetres(total)} thick; ${tool.name} takes ${millimetres(limit.value)}.`, {
@@ -156,8 +166,10 @@ function measuring(state: StepState, shape: LyingShape): Finding[] {
 
 function judge(context: RuleContext, state: StepState): Finding[] {
   const shape = state.atRoom;
-  if (!shape || !shapeIsKnown(state.after)) return weighing(context, state);
-  return [...sagging(context, state, shape), ...weighing(context, state), ...measuring(state, shape)];
+  // On tape or frame the robot carries the frame, whose limits are its own.
+  if (!shape) return [];
+  const sag = shapeIsKnown(state.after) ? sagging(context, state, shape) : [];
+  return [...sag, ...weighing(context, state), ...measuring(state)];
 }
 
 export const sagRule: Rule = {

@@ -23,7 +23,8 @@ function pairBow({ limits }: RuleContext, state: StepState, shape: LyingShape, {
     { label: "Warp of the pair", value: shape.warp, unit: "m", working: warpWorking(shape) },
     { label: "Bow, device side up", value: standardBow(shape.sagitta), unit: "m" },
   ];
-  const lies = `On ${carrier.name} the pair lies ${direction} ${wholeMicrometres(shape.warp)} at 25\u00a0°C`;
+  const how = exceeds(shape.warp, limits.flatWithin.value) ? direction : "flat,";
+  const lies = `On ${carrier.name} the pair lies ${how} ${wholeMicrometres(shape.warp)} at 25\u00a0°C`;
   // Without a tool or its limit the warp rule says what is missing.
   if (!tool || !limit) return [];
   const outcome = againstUpperLimit(shape.warp, limit.value, limit.value * limits.warpMargin.value, "do not run");
@@ -166,6 +167,6 @@ export const carrierRule: Rule = {
   number: 7,
   title: TITLE,
   asks: "Does the carrier match by the computed bow of the pair; does the light or solvent that lets it go pass it; does it fit the trimmed wafer, take the heat, hold and show on the tool, and have uses left?",
-  limits: ["warpMargin", "printThroughBelow"],
+  limits: ["warpMargin", "flatWithin", "printThroughBelow"],
   judge,
 };

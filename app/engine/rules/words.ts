@@ -1,4 +1,3 @@
-import { formatNumber } from "../units/format-number.ts";
 import { formatQuantity } from "../units/format.ts";
 
 /** Figures as they stand in a finding's sentence: the unit that the trade says, rounded to what a hand can use. */
@@ -19,6 +18,5 @@ export const megapascals = (value: number) =>
   formatQuantity(value, "stress", { unit: "MPa", significant: 3, trim: true });
 export const percent = (share: number) => formatQuantity(share, "fraction", { unit: "%", significant: 2, trim: true });
 export const duration = (seconds: number) => formatQuantity(seconds, "time", { significant: 3, trim: true });
-export const plain = (value: number) => formatNumber(value, { significant: 3, trim: true });
 
 export const capital = (text: string) => text.charAt(0).toUpperCase() + text.slice(1);
