@@ -179,3 +179,26 @@ export {
 } from "./uncertainty/laminate-model.ts";
 export { shapeCurve, type ShapeCurve } from "./uncertainty/shape-curve.ts";
 export { firstOrderWorking, lotShareWorking, sampledChanceWorking, sampledWorking } from "./uncertainty/working.ts";
+
+export { rankBendingSteps, type RankedStep } from "./rules/rank-bending.ts";
+
+// What the handling rules ask beyond the physics
+export {
+  CLAMPINGS,
+  CONTACT_MEANS,
+  RESISTANCE_WORDS,
+  SOLVENT_FAMILIES,
+  WAFER_KINDS,
+  type BumpsInput,
+  type Clamping,
+  type ContactInput,
+  type ContactMeans,
+  type IncomingGate,
+  type Resistance,
+  type Resistances,
+  type ResistanceWord,
+  type SolventFamily,
+  type StressRecord,
+  type TapeInput,
+  type WaferKind,
+} from "./flow/handling-inputs.ts";

@@ -2,7 +2,7 @@ import type { EquationId } from "./equations.ts";
 
 /** SI unit of a figure as plain text, the way it is stored and sent. `1` is a pure number. */
 export type UnitSymbol =
-  "m" | "Pa" | "K" | "1/m" | "1/K" | "N/m" | "N·m" | "1" | "s" | "kg/m3" | "rad" | "N" | "m2" | "m/s2";
+  "m" | "Pa" | "K" | "1/m" | "1/K" | "N/m" | "N·m" | "1" | "s" | "kg" | "kg/m3" | "rad" | "N" | "m2" | "m/s2";
 
 /** One symbol of a calculation with its value. `source` is a bibliography id or the provenance of an input in words. */
 export interface WorkingLine {

@@ -57,9 +57,22 @@ export function bySeverity(a: Pick<Finding, "outcome">, b: Pick<Finding, "outcom
 const SUBJECTS: Record<number, string> = {
   1: "thickness",
   2: "warp",
+  3: "curling",
+  4: "holding flat",
+  5: "sag",
   6: "bonding material",
+  7: "carrier",
   8: "debond",
+  9: "cover and variation",
+  10: "edge",
+  11: "film heat",
   12: "order",
+  13: "stress source",
+  14: "validity",
+  15: "incoming",
+  16: "tape",
+  17: "clocks",
+  18: "contact",
 };
 
 /** A finding in a table's cell: 'rule 2, 86 % of limit'. */

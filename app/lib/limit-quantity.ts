@@ -9,7 +9,7 @@ export interface LimitQuantity {
 }
 
 /** The quantity that a limit's SI unit stands for. */
-export function limitQuantity({ unit, temperaturePoint }: LimitDefinition): LimitQuantity {
+export function limitQuantity({ unit, temperaturePoint, count }: LimitDefinition): LimitQuantity {
   switch (unit) {
     case "m":
       return { dimension: "length", unit: "µm" };
@@ -18,7 +18,11 @@ export function limitQuantity({ unit, temperaturePoint }: LimitDefinition): Limi
         ? { dimension: "temperature", unit: "°C" }
         : { dimension: "temperatureDifference", unit: "K" };
     case "1":
-      return { dimension: "fraction", unit: "%" };
+      return { dimension: "fraction", unit: count ? "" : "%" };
+    case "Pa":
+      return { dimension: "stress", unit: "MPa" };
+    case "s":
+      return { dimension: "time", unit: "h" };
   }
 }
 

@@ -1,4 +1,5 @@
 import type { Finding } from "#app/engine/rules/finding.ts";
+import { ROOM_TEMPERATURE } from "#app/engine/laminate/layer.ts";
 import { outcomeRank, supportRank, type Holding } from "#app/engine/vocabulary.ts";
 import type { BondResult, StepResult } from "#app/schemas/assessment-result.ts";
 import { celsius } from "./assessment-figure.ts";
@@ -38,14 +39,27 @@ export function doNotLines(group: SheetGroup, context: DoNotContext): string[] {
 const BLOCKED: Record<number, string> = {
   1: "it needs more support",
   2: "it bows more than the tool takes",
-  6: "it is too hot for the bond",
+  3: "it would roll up",
+  4: "the chuck does not hold it flat",
+  5: "it does not fit the slot or robot",
+  6: "the bond does not stand it",
+  7: "the carrier does not stand it",
   8: "it would come off its carrier free",
+  9: "its thickness varies too much, or its bumps stand out",
+  10: "its edge or ground face would break it",
+  11: "it is too hot for its films or solder",
   12: "it cannot be done in this order",
+  15: "the lot is not as assessed",
+  16: "the tape does not stand it",
+  17: "it would be too late, or wet",
+  18: "it would be touched on its bumps",
 };
 
-function whyBlocked(step: StepResult, { rule, outcome }: Finding, tapeTemperature: number): string {
+function whyBlocked(step: StepResult, { rule, outcome, limit }: Finding, tapeTemperature: number): string {
   if (outcome === "cannot judge") return "an input is missing";
-  if ((rule === 8 || rule === 12) && onTape(step.planned)) {
+  if (rule === 6 && step.peakTemperature > ROOM_TEMPERATURE && limit?.temperaturePoint)
+    return "it is too hot for the bond";
+  if ((rule === 8 || rule === 12 || rule === 16) && onTape(step.planned)) {
     if (step.peakTemperature > tapeTemperature) return "it is too hot for the tape";
     if (step.exposures.includes("vacuum") || step.exposures.includes("plasma")) return "tape takes no vacuum";
   }

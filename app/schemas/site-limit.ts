@@ -7,16 +7,23 @@ import { quantity } from "./quantity.ts";
 const definitions: Record<LimitKey, LimitDefinition> = LIMIT_DEFINITIONS;
 
 /** Limits of every kind with the widest range that makes sense of them. */
-function rangeOf({ unit, temperaturePoint }: LimitDefinition): PhysicalRange {
+function rangeOf({ unit, rule, temperaturePoint, count }: LimitDefinition): PhysicalRange {
   switch (unit) {
     case "m":
-      return { least: 0, most: 2e-3, words: "0 to 2 mm" };
+      // Gaps and clearances are larger than anything of a wafer itself.
+      return rule !== 4 && rule !== 5
+        ? { least: 0, most: 2e-3, words: "0 to 2 mm" }
+        : { least: 0, most: 10e-3, words: "0 to 10 mm" };
     case "K":
       return temperaturePoint
         ? { least: 273.15, most: 673.15, words: "0 °C to 400 °C" }
         : { least: 0, most: 200, words: "0 to 200 K" };
     case "1":
-      return { least: 0, most: 1, words: "0 to 100 %" };
+      return count ? { least: 0, most: 100, words: "0 to 100" } : { least: 0, most: 1, words: "0 to 100 %" };
+    case "Pa":
+      return { least: 0, most: 5e9, words: "0 to 5 GPa" };
+    case "s":
+      return { least: 0, most: 94608000, words: "0 to 3 years" };
   }
 }
 
@@ -52,6 +59,15 @@ const AT_LEAST: readonly (readonly [LimitKey, LimitKey])[] = [
   ["edgeRingFrom", "edgeRingLeast"],
   ["edgeRingLeast", "carrierBelow"],
   ["carrierBelow", "tapeInLineFrom"],
+  ["sealGapPlain", "sealGapPlainClear"],
+  ["sealGapCompliant", "sealGapCompliantClear"],
+  ["stressGround", "stressGroundClear"],
+  ["slot200", "slotClear200"],
+  ["slot300", "slotClear300"],
+  ["weightLoss", "weightLossClear"],
+  ["coverLeftClear", "coverLeft"],
+  ["trimAdvisedBelow", "trimBelow"],
+  ["reliefAdvisedBelow", "reliefBelow"],
 ];
 
 /** Pairs of limits that contradict each other. */

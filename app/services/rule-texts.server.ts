@@ -1,6 +1,7 @@
 import { LIMIT_DEFINITIONS, type LimitDefinition, type LimitKey } from "#app/engine/rules/limits.ts";
 import { RULES } from "#app/engine/rules/rules.ts";
 import { formatQuantity } from "#app/engine/units/format.ts";
+import { limitQuantity } from "#app/lib/limit-quantity.ts";
 import { mayOnSite } from "#app/policies/permissions.ts";
 import type { RuleText } from "#app/schemas/rule-text.ts";
 import type { ActorScope } from "#app/server/scope.server.ts";
@@ -23,14 +24,7 @@ function limitText(key: LimitKey, { value, source }: { value: number; source: st
   return { title: definition.title, value: limitValue(value, definition), delivered, source };
 }
 
-function limitValue(value: number, { unit, temperaturePoint }: LimitDefinition): string {
-  if (temperaturePoint) return formatQuantity(value, "temperature", { unit: "°C" });
-  switch (unit) {
-    case "m":
-      return formatQuantity(value, "length", { unit: "µm" });
-    case "K":
-      return formatQuantity(value, "temperatureDifference", { unit: "K" });
-    case "1":
-      return formatQuantity(value, "fraction", { unit: "%" });
-  }
+function limitValue(value: number, definition: LimitDefinition): string {
+  const { dimension, unit } = limitQuantity(definition);
+  return formatQuantity(value, dimension, { unit });
 }

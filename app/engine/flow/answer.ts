@@ -45,7 +45,8 @@ export function answerSentences(flow: FlowInput, assessment: FlowAssessment): st
   const support = supportSentence(flow, assessment);
   if (verdict.outcome === "clear" || verdict.outcome === "caution") {
     const tightest = tightestSentence(assessment);
-    return tightest ? [support, tightest] : [support];
+    const cautions = cautionSentence(assessment);
+    return [support, tightest, cautions].filter((sentence) => sentence !== null);
   }
   return blocking
     ? [support, `Step ${blocking.step}, ${flow.steps[blocking.step - 1]?.title ?? ""}: ${blocking.reason}`]
@@ -69,6 +70,16 @@ function supportSentence(flow: FlowInput, { steps, verdict }: FlowAssessment): s
 }
 
 const finish = (opening: string, rest: string) => `${opening}${rest}.`;
+
+/** Which steps have to be signed. */
+function cautionSentence({ findings }: FlowAssessment): string | null {
+  const steps = [...new Set(findings.filter(({ outcome }) => outcome === "caution").map(({ step }) => step))];
+  if (steps.length === 0) return null;
+  const last = steps.at(-1);
+  return steps.length === 1
+    ? `Caution at step ${last}.`
+    : `Cautions at steps ${steps.slice(0, -1).join(", ")} and ${last}.`;
+}
 
 function tightestSentence(assessment: FlowAssessment): string | null {
   const tightest = tightestStep(assessment);

@@ -2,7 +2,7 @@ import type { Finding, RuleContext } from "../rules/finding.ts";
 import type { SiteLimits } from "../rules/limits.ts";
 import { requiredAt } from "../rules/rule-01-thickness.ts";
 import { RULES } from "../rules/rules.ts";
-import { outcomeRank, type Outcome, type SupportClass } from "../vocabulary.ts";
+import { outcomeRank, supportRank, type Outcome, type SupportClass } from "../vocabulary.ts";
 import type { FlowInput } from "./model.ts";
 import { statedInputs } from "./stated-inputs.ts";
 import { flowUncertainty, type Contribution } from "./uncertainty.ts";
@@ -48,6 +48,16 @@ export function worstOutcome(findings: Finding[]): Outcome {
   );
 }
 
+/** Support that a step needs: by the thickness rule, raised by a sag that no free wafer may have. */
+function supportNeeded(context: RuleContext, state: StepState, findings: Finding[]): SupportClass | null {
+  const required = requiredAt(context, state)?.support ?? null;
+  const sags = findings.some(
+    ({ rule, step, outcome }) => rule === 5 && step === state.number && outcome === "needs support",
+  );
+  if (!sags || required === null) return required;
+  return supportRank(required) < supportRank("tape or ring") ? "tape or ring" : required;
+}
+
 /**
  * Walks a flow, judges every rule at every step and gives the verdict.
  * @throws EngineInputError when an input cannot be computed with; nothing that could not be computed counts as passed
@@ -63,7 +73,7 @@ export function assessFlow(flow: FlowInput, limits: SiteLimits): FlowAssessment 
   return {
     steps: steps.map((state, index) => ({
       state,
-      required: requiredAt(context, state)?.support ?? null,
+      required: supportNeeded(context, state, findings),
       outcome: worstOutcome(findings.filter(({ step }) => step === state.number)),
       uncertainty: { atRoom: uncertainty[index]?.atRoom ?? null, atPeak: uncertainty[index]?.atPeak ?? null },
       budget: uncertainty[index]?.budget ?? [],

@@ -2,12 +2,25 @@ import type { ExpansionCurve } from "../laminate/expansion-curve.ts";
 import type { FilmPattern } from "../patterned/pattern.ts";
 import type { Measured } from "../measured.ts";
 import type { Exposure, Holding, Side } from "../vocabulary.ts";
+import type {
+  BondHandling,
+  BondingMaterialHandling,
+  CarrierHandling,
+  EquipmentHandling,
+  FilmAdditionHandling,
+  FilmHandling,
+  FlowHandling,
+  StepHandling,
+  WaferHandling,
+} from "./handling-inputs.ts";
 
 /**
  * What a flow is made of, complete in itself: names, values and provenance are copied in, so a stored assessment can be
  * read for ever without the library it came from. SI units; temperatures in K.
  *
- * Left out in this version: wafers of a lot, tape and clock limits.
+ * What the handling rules ask beyond the physics stands in `handling-inputs.ts`.
+ *
+ * Left out in this version: wafers of a lot.
  */
 
 export const STEP_KINDS = [
@@ -41,7 +54,7 @@ export const FILM_KINDS = ["metal", "polymer", "inorganic", "solder"] as const;
 export type FilmKind = (typeof FILM_KINDS)[number];
 
 /** A film material. `yieldStress` is that at 25 °C; only metals that yield have one. */
-export interface FilmInput {
+export interface FilmInput extends FilmHandling {
   id: string;
   name: string;
   kind: FilmKind;
@@ -61,7 +74,7 @@ export interface FilmInput {
  * A film put down by a step. `stress` at 25 °C on a full-thickness monitor held flat, tension positive, of the film before it
  * is cut into a pattern.
  */
-export interface FilmAddition {
+export interface FilmAddition extends FilmAdditionHandling {
   side: Side;
   film: FilmInput;
   thickness: Measured;
@@ -92,7 +105,7 @@ export type CarrierMaterial = (typeof CARRIER_MATERIALS)[number];
  * its value lies above the mean of the curve over `meanExpansionOver`, by default the curve's own range, and its tolerance is the
  * uncertainty of the whole curve.
  */
-export interface CarrierInput {
+export interface CarrierInput extends CarrierHandling {
   id: string;
   name: string;
   material: CarrierMaterial;
@@ -124,7 +137,7 @@ export type ReleaseMethod = (typeof RELEASE_METHODS)[number];
  * thermoplastic alone, from where on the plates slide. Without a flow point nothing slides: the pair keeps the state of rest
  * that it was bonded in, and a step that reaches the softening point says so in its remarks.
  */
-export interface BondingMaterialInput {
+export interface BondingMaterialInput extends BondingMaterialHandling {
   id: string;
   name: string;
   effectiveModulus: Measured;
@@ -145,7 +158,7 @@ export const PEAK_HOLDINGS = ["free", "held"] as const;
 export type PeakHolding = (typeof PEAK_HOLDINGS)[number];
 
 /** A tool with its two warp limits; null where the wafer comes on a frame and no limit is given. */
-export interface EquipmentInput {
+export interface EquipmentInput extends EquipmentHandling {
   id: string;
   name: string;
   warpLimitEdgesUp: Measured | null;
@@ -158,13 +171,13 @@ export interface EquipmentInput {
   largestDiameter: Measured;
 }
 
-export interface BondInput {
+export interface BondInput extends BondHandling {
   carrier: CarrierInput;
   material: BondingMaterialInput;
   thickness: Measured;
 }
 
-export interface StepInput {
+export interface StepInput extends StepHandling {
   kind: StepKind;
   title: string;
   peakTemperature: number;
@@ -183,7 +196,7 @@ export interface StepInput {
   groundFaceForce: Measured | null;
 }
 
-export interface FlowInput {
+export interface FlowInput extends FlowHandling {
   name: string;
   wafer: {
     name: string;
@@ -191,6 +204,6 @@ export interface FlowInput {
     orientation: "100" | "111";
     thickness: Measured;
     incoming?: IncomingShape | null;
-  };
+  } & WaferHandling;
   steps: StepInput[];
 }

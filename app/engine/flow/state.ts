@@ -7,7 +7,8 @@ import type { BondState } from "./bond.ts";
 import { filmEntry } from "./film-entry.ts";
 import { incomingParts, siliconEntries, type Incoming } from "./silicon.ts";
 import type { StackEntry } from "./stack-entry.ts";
-import type { FilmAddition, FlowInput, StepInput } from "./model.ts";
+import type { BumpsInput, TapeInput } from "./handling-inputs.ts";
+import type { BondInput, FilmAddition, FlowInput, StepInput } from "./model.ts";
 
 /** A film as it is on the wafer, with what it has been through. */
 export interface FilmState {
@@ -33,17 +34,37 @@ export interface WaferState {
   /** force per length of the ground or polished back face, N/m, compression negative */
   groundFaceForce: number;
   bond: BondState | null;
+  /** carrier on the other face, from the second bond of a transfer to the debond of the first */
+  transfer: BondState | null;
   /** tape or frame that the wafer is on, if any */
   mount: "grinding tape" | "film frame" | "edge ring" | null;
+  /** data of that tape where they were given */
+  tape: TapeInput | null;
   trim: { width: Measured; depth: Measured } | null;
   ground: boolean;
+  /** whether the damage of the last grind was taken off */
+  relieved: boolean;
+  bumps: BumpsInput | null;
+  /** tallest feature of the device side that is no bump */
+  topography: Measured | null;
   diced: boolean;
   holding: Holding;
   faceUp: FaceUp;
 }
 
-/** The wafer before its first step: bare silicon, device side up. */
+/** Face that a bond is on: the device side unless said. */
+export function bondedFace(bond: Pick<BondInput, "face">): Side {
+  return bond.face ?? "front";
+}
+
+/**
+ * The wafer before its first step: bare silicon, device side up.
+ * @throws EngineInputError for a wafer without thickness, and for anything that is no silicon wafer
+ */
 export function initialState(flow: FlowInput): WaferState {
+  const kind = flow.wafer.kind ?? "silicon wafer";
+  if (kind !== "silicon wafer")
+    throw new EngineInputError("wafer.kind", `a ${kind} is out of scope: its bow follows other laws`, "silicon wafer");
   if (!(flow.wafer.thickness.value > 0))
     throw new EngineInputError("wafer.thickness", "the silicon must have a thickness", "> 0 m");
   const { orientation, thickness } = flow.wafer;
@@ -57,9 +78,14 @@ export function initialState(flow: FlowInput): WaferState {
     back: [],
     groundFaceForce: 0,
     bond: null,
+    transfer: null,
     mount: null,
+    tape: null,
     trim: null,
     ground: false,
+    relieved: false,
+    bumps: null,
+    topography: null,
     diced: false,
     holding: "bare",
     faceUp: "device side",
@@ -92,9 +118,38 @@ function mountAfter(before: WaferState, step: StepInput): WaferState["mount"] {
   return before.mount;
 }
 
-/** The face that is up once the step is planned as it is: back side up on grinding tape and on a carrier. */
-function faceUpAfter(step: StepInput, bonded: boolean): FaceUp {
-  return bonded || step.planned === "grinding tape" ? "back side" : "device side";
+/** The tape that it is on after the step: that which this step names, else that which it came on. */
+function tapeAfter(before: WaferState, step: StepInput, mount: WaferState["mount"]): TapeInput | null {
+  if (mount === null) return null;
+  if (step.kind === "laminate tape" || step.kind === "mount on frame") return step.tape ?? null;
+  return step.tape ?? before.tape;
+}
+
+/** The carriers after the step: a second bond on the other face is a transfer, and a debond takes the first one off. */
+function bondsAfter(before: WaferState, step: StepInput): Pick<WaferState, "bond" | "transfer"> {
+  const { bond, transfer } = before;
+  if (step.kind === "debond") return { bond: transfer, transfer: null };
+  if (step.kind !== "bond" || !step.bond) return { bond, transfer };
+  const made = { ...step.bond, bondTemperature: step.peakTemperature };
+  if (!bond) return { bond: made, transfer };
+  return { bond, transfer: !transfer && bondedFace(made) !== bondedFace(bond) ? made : transfer };
+}
+
+/**
+ * The face that is up once the step is planned as it is: the one away from the carrier, the back side on grinding tape. In a
+ * transfer the carrier that stays lies below.
+ */
+function faceUpAfter(step: StepInput, { bond, transfer }: Pick<WaferState, "bond" | "transfer">): FaceUp {
+  const lies = transfer ?? bond;
+  if (lies) return bondedFace(lies) === "front" ? "back side" : "device side";
+  return step.planned === "grinding tape" ? "back side" : "device side";
+}
+
+const RELIEVES = ["stress relief", "polish", "via reveal"];
+
+function relievedAfter(before: WaferState, step: StepInput): boolean {
+  if (step.kind === "grind") return false;
+  return before.relieved || (before.ground && RELIEVES.includes(step.kind));
 }
 
 /**
@@ -106,12 +161,8 @@ export function applyStep(before: WaferState, step: StepInput, field: string): W
   if (step.siliconAfter && !(step.siliconAfter.value > 0))
     throw new EngineInputError(`${field}.siliconAfter`, "no silicon would be left after this step", "> 0 m");
   const thinner = step.siliconAfter !== null && step.siliconAfter.value <= before.silicon.value;
-  const bond =
-    step.kind === "bond" && step.bond && !before.bond
-      ? { ...step.bond, bondTemperature: step.peakTemperature }
-      : step.kind === "debond"
-        ? null
-        : before.bond;
+  const bonds = bondsAfter(before, step);
+  const mount = mountAfter(before, step);
   const { orientation, incoming } = before;
   const silicon = thinner && step.siliconAfter ? step.siliconAfter : before.silicon;
   const groundFaceForce = step.groundFaceForce?.value ?? before.groundFaceForce;
@@ -127,13 +178,17 @@ export function applyStep(before: WaferState, step: StepInput, field: string): W
     front: add(remove(before.front, "front", step), "front", step),
     back: add(remove(before.back, "back", step), "back", step),
     groundFaceForce,
-    bond,
-    mount: mountAfter(before, step),
+    ...bonds,
+    mount,
+    tape: tapeAfter(before, step, mount),
     trim: step.edgeTrim ?? before.trim,
     ground: before.ground || step.kind === "grind",
+    relieved: relievedAfter(before, step),
+    bumps: step.bumps ?? before.bumps,
+    topography: step.topography ?? before.topography,
     diced: before.diced || step.kind === "dice",
     holding: step.planned,
-    faceUp: faceUpAfter(step, bond !== null),
+    faceUp: faceUpAfter(step, bonds),
   };
 }
 

@@ -1,6 +1,6 @@
 import type { FlowInput } from "../flow/model.ts";
 import type { StepState } from "../flow/walk.ts";
-import type { Outcome } from "../vocabulary.ts";
+import type { Outcome, SourceKind } from "../vocabulary.ts";
 import type { UnitSymbol, Working } from "../working.ts";
 import type { LimitKey, SiteLimits } from "./limits.ts";
 
@@ -41,6 +41,8 @@ export interface Finding {
 export interface StepUncertainty {
   atRoom: number | null;
   atPeak: number | null;
+  /** what moves the sagitta at 25 °C most, largest first; m */
+  budget?: { input: string; source: SourceKind; contribution: number }[];
 }
 
 export interface RuleContext {

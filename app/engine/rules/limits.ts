@@ -1,21 +1,10 @@
-/**
- * The limits that rules judge against: each has a meaning, a default, a unit and a source, and is a site's to set.
- * A default marked 'common practice, no source' is a habit of the trade, not a published figure.
- */
+import { PRACTICE, type LimitDefinition } from "./limit-definition.ts";
+import { HOLDING_LIMITS } from "./limits-holding.ts";
+import { PROCESS_LIMITS } from "./limits-process.ts";
 
-export interface LimitDefinition {
-  title: string;
-  /** default in SI units */
-  value: number;
-  unit: "m" | "K" | "1";
-  temperatureDifference?: boolean;
-  temperaturePoint?: boolean;
-  rule: number;
-  source: string;
-}
+export type { LimitDefinition };
 
-const PRACTICE = "common practice, no source";
-
+/** Every limit that the rules judge against. */
 export const LIMIT_DEFINITIONS = {
   bareFrom150: { title: "150 mm wafer: bare from", value: 250e-6, unit: "m", rule: 1, source: PRACTICE },
   bareFrom200: { title: "200 mm wafer: bare from", value: 300e-6, unit: "m", rule: 1, source: PRACTICE },
@@ -86,21 +75,8 @@ export const LIMIT_DEFINITIONS = {
     source: PRACTICE,
   },
   flatWithin: { title: "Called flat up to", value: 15e-6, unit: "m", rule: 2, source: PRACTICE },
-  curlMargin: {
-    title: "Caution from this share of the critical load",
-    value: 0.7,
-    unit: "1",
-    rule: 3,
-    source: PRACTICE,
-  },
-  adhesiveMargin: {
-    title: "Margin below a bonding material's temperature limit",
-    value: 20,
-    unit: "K",
-    temperatureDifference: true,
-    rule: 6,
-    source: PRACTICE,
-  },
+  ...HOLDING_LIMITS,
+  ...PROCESS_LIMITS,
 } as const satisfies Record<string, LimitDefinition>;
 
 export type LimitKey = keyof typeof LIMIT_DEFINITIONS;

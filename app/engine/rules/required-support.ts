@@ -9,7 +9,7 @@ const ON_FRAME = ["mount on frame", "debond", "clean", "dice", "measure", "store
 const TAPE_IN_LINE = ["laminate tape", "grind", "stress relief", "mount on frame"] as const;
 
 /** What the thickness rule needs to know of a step. */
-export type SupportQuestion = Pick<StepInput, "kind" | "planned" | "peakTemperature" | "exposures">;
+export type SupportQuestion = Pick<StepInput, "kind" | "planned" | "peakTemperature" | "exposures" | "inLine">;
 
 export interface RequiredSupport {
   support: SupportClass;
@@ -60,7 +60,8 @@ export function requiredSupport(
   const isAtLeast = (key: LimitKey) => reaches(thickness, limits[key].value);
   const process = demandingProcess(step, limits.tapeTemperature.value);
   if (process && !isAtLeast("processCarrierBelow")) {
-    if (step.planned === "edge ring" && isAtLeast("edgeRingLeast"))
+    // A ring stands over the face: no focus on a stepper, no lamination.
+    if (step.planned === "edge ring" && step.kind !== "pattern" && isAtLeast("edgeRingLeast"))
       return {
         support: "tape or ring",
         because: "an edge ring takes it",
@@ -77,7 +78,7 @@ export function requiredSupport(
     return { support: "tape or ring", because: "it is too thin for a gripper", limit: gripper, floor: "carrierBelow" };
   if (mount === "film frame" && includes(ON_FRAME, step))
     return { support: "tape or ring", because: "it stays on its frame", limit: "carrierBelow", floor: null };
-  if (mount !== null && includes(TAPE_IN_LINE, step) && isAtLeast("tapeInLineFrom"))
+  if (mount !== null && step.inLine !== false && includes(TAPE_IN_LINE, step) && isAtLeast("tapeInLineFrom"))
     return {
       support: "tape or ring",
       because: "it stays on tape, in line",

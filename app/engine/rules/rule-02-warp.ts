@@ -8,7 +8,8 @@ import type { FaceUp, Outcome } from "../vocabulary.ts";
 import { outcomeRank } from "../vocabulary.ts";
 import { againstUpperLimit, exceeds } from "./against-limit.ts";
 import type { Finding, Rule, RuleContext } from "./finding.ts";
-import { shareBeyond } from "./share-beyond.ts";
+import { shapeIsKnown } from "./shape-known.ts";
+import { shareBeyond, sharedBy } from "./share-beyond.ts";
 import { warpWorking } from "./warp-working.ts";
 
 const TITLE = "Warp on the tool";
@@ -26,13 +27,14 @@ function moments({ steps, uncertainty }: RuleContext, state: StepState): Moment[
   const previous = steps[state.number - 2];
   const own = uncertainty[state.number - 1];
   const found: Moment[] = [];
-  if (previous?.atRoom)
+  if (previous?.atRoom && shapeIsKnown(previous.after))
     found.push({
       when: "as it is loaded",
       shape: previous.atRoom,
       faceUp: previous.after.faceUp,
       uncertainty: uncertainty[previous.number - 1]?.atRoom ?? null,
     });
+  if (!shapeIsKnown(state.after)) return found;
   if (state.atRoom)
     found.push({
       when: "as it leaves",
@@ -67,10 +69,14 @@ function judge(context: RuleContext, state: StepState): Finding[] {
         remedy: "Choose the tool of this step.",
       },
     ];
-  const judged = found.map((moment) => judgeMoment(context, state, equipment, moment));
+  const judged = found.map((moment) => ({ ...judgeMoment(context, state, equipment, moment), shape: moment.shape }));
   // Several moments of one step are one finding: the worst, at equal outcome the one nearest its limit.
   judged.sort((a, b) => outcomeRank(b.outcome) - outcomeRank(a.outcome) || use(b) - use(a));
-  return judged.slice(0, 1);
+  return judged.slice(0, 1).map(({ shape, figures: [warp, ...figures], ...finding }) => ({
+    ...finding,
+    // A working costs as much as the shape itself, so only the finding that stays gets one.
+    figures: warp ? [{ ...warp, working: warpWorking(shape) }, ...figures] : [],
+  }));
 }
 
 const use = (finding: Finding) => (finding.figures[0]?.value ?? 0) / (finding.limit?.value ?? Infinity);
@@ -86,7 +92,7 @@ function inWords({ shape, uncertainty }: Moment, direction: string, flatWithin: 
 }
 
 function judgeMoment(
-  { limits }: RuleContext,
+  { limits, uncertainty: spread }: RuleContext,
   state: StepState,
   equipment: NonNullable<StepState["step"]["equipment"]>,
   moment: Moment,
@@ -109,7 +115,6 @@ function judgeMoment(
         value: shape.warp,
         unit: "m" as const,
         standardUncertainty: uncertainty,
-        working: warpWorking(shape),
       },
       {
         label: "Bow, device side up",
@@ -131,10 +136,12 @@ function judgeMoment(
   const margin = limit.value * limits.warpMargin.value;
   const outcome: Outcome = againstUpperLimit(shape.warp, limit.value, margin, "do not run");
   const share = shareBeyond(shape.warp, uncertainty, limit.value);
+  const at = moment.when === "as it is loaded" ? state.number - 2 : state.number - 1;
+  const by = share ? ` ${sharedBy(spread[at]?.budget ?? [])}` : "";
   return {
     ...found,
     outcome,
-    reason: `${lies} ${when}; ${inSentence(equipment.name)} takes ${um(limit.value)} ${direction}.${share ? ` ${share}` : ""}`,
+    reason: `${lies} ${when}; ${inSentence(equipment.name)} takes ${um(limit.value)} ${direction}.${share ? ` ${share}${by}` : ""}`,
     limit: { label: `${equipment.name}, ${direction}`, value: limit.value, unit: "m", source: provenance(limit) },
     remedy:
       outcome === "clear"

@@ -1,20 +1,23 @@
 import { provenance } from "../measured.ts";
+import { flowPoint, glassTransition } from "../flow/bond.ts";
 import type { StepState } from "../flow/walk.ts";
 import { formatQuantity } from "../units/format.ts";
 import type { Outcome } from "../vocabulary.ts";
-import { againstUpperLimit, reaches } from "./against-limit.ts";
+import { bondBudget } from "./bond-budget.ts";
+import { bondChemistry } from "./bond-chemistry.ts";
+import { againstUpperLimit, exceeds, reaches } from "./against-limit.ts";
 import type { Finding, Rule, RuleContext } from "./finding.ts";
+import { celsius, duration } from "./words.ts";
 
-const TITLE = "Bonding material and temperature";
-
-const celsius = (kelvin: number) => formatQuantity(kelvin, "temperature", { unit: "°C", decimals: 0 });
+const TITLE = "Bonding material";
 
 /** The bond that the step's heat acts on: the one it comes with, not the one that this step makes or has just let go. */
 function bondUnderHeat(state: StepState) {
   return state.step.kind === "bond" || state.step.kind === "debond" ? null : state.before.bond;
 }
 
-function judge({ limits }: RuleContext, state: StepState): Finding[] {
+function judge(context: RuleContext, state: StepState): Finding[] {
+  const { limits } = context;
   const bond = bondUnderHeat(state);
   if (!bond) return [];
   const { material } = bond;
@@ -24,8 +27,9 @@ function judge({ limits }: RuleContext, state: StepState): Finding[] {
     { label: "Peak temperature", value: peak, unit: "K", temperaturePoint: true },
     { label: "Margin asked below the limit", value: margin, unit: "K" },
   ];
-  if (material.softening)
-    figures.push({ label: "Softening point", value: material.softening.value, unit: "K", temperaturePoint: true });
+  const softensAt = flowPoint(material) ?? glassTransition(material);
+  if (softensAt !== null)
+    figures.push({ label: softeningWord(material), value: softensAt, unit: "K", temperaturePoint: true });
   const make = (outcome: Outcome, reason: string, remedy: string | null): Finding => ({
     rule: 6,
     title: TITLE,
@@ -43,11 +47,30 @@ function judge({ limits }: RuleContext, state: StepState): Finding[] {
     remedy,
   });
   const findings = [againstTemperatureLimit(peak, material.name, material.temperatureLimit.value, margin, make)];
-  if (material.softening && reaches(peak, material.softening.value))
-    findings.push(aboveSoftening(state, material, make));
-  return findings;
+  if (softensAt !== null && reaches(peak, softensAt)) findings.push(aboveSoftening(state, material, softensAt, make));
+  const tooLong = beyondHoldTime(state, material, margin, make);
+  if (tooLong) findings.push(tooLong);
+  return [...findings, ...bondChemistry(context, state, material), ...bondBudget(context, state, material)];
 }
 
+/** A temperature limit holds for a time: near it, a longer hold is more than was tried. */
+function beyondHoldTime(
+  { step }: StepState,
+  { name, temperatureLimit, limitTime }: BondMaterial,
+  margin: number,
+  make: MakeFinding,
+): Finding | null {
+  if (!limitTime || step.holdTime === null || !reaches(step.peakTemperature, temperatureLimit.value - margin))
+    return null;
+  if (!exceeds(step.holdTime, limitTime.value)) return null;
+  return make(
+    "do not run",
+    `${duration(step.holdTime)} near its limit; ${name} stands that for ${duration(limitTime.value)}.`,
+    "Shorten the hold, lower the peak, or bond with a material that takes more.",
+  );
+}
+
+type BondMaterial = NonNullable<StepState["before"]["bond"]>["material"];
 type MakeFinding = (outcome: Outcome, reason: string, remedy: string | null) => Finding;
 
 function againstTemperatureLimit(
@@ -70,31 +93,30 @@ function againstTemperatureLimit(
   return make("do not run", `${figures}.`, remedy);
 }
 
-function aboveSoftening(
-  state: StepState,
-  material: NonNullable<StepState["before"]["bond"]>["material"],
-  make: MakeFinding,
-): Finding {
-  const peak = state.step.peakTemperature;
-  const above = `${celsius(peak)} reaches the softening point of ${material.name}, ${celsius(material.softening?.value ?? peak)}`;
+/** What the temperature from which a material is soft is called: a stated flow point comes before the softening point. */
+const softeningWord = (material: BondMaterial) => (flowPoint(material) === null ? "Softening point" : "Flow point");
+
+function aboveSoftening(state: StepState, material: BondMaterial, softensAt: number, make: MakeFinding): Finding {
+  const point = softeningWord(material).toLowerCase();
+  const above = `${celsius(state.step.peakTemperature)} reaches the ${point} of ${material.name}, ${celsius(softensAt)}`;
   if (!material.flows) return make("clear", `${above}: it is cross-linked, stays coupled and does not flow.`, null);
   if (state.step.exposures.includes("vacuum"))
     return make(
       "do not run",
       `${above}: it flows, and in vacuum the thin wafer blisters or floats.`,
-      "Keep vacuum steps below the softening point, or bond with a cross-linked material.",
+      "Keep vacuum steps below that point, or bond with a cross-linked material.",
     );
   return make(
     "caution",
     `${above}: it flows, and the pair can slide until it cools.`,
-    "Keep the step below the softening point, or bond with a cross-linked material.",
+    "Keep the step below that point, or bond with a cross-linked material.",
   );
 }
 
 export const adhesiveRule: Rule = {
   number: 6,
   title: TITLE,
-  asks: "Does the bonding material stay below its temperature limit with its margin, and below the point where it flows, at every step between bond and debond?",
-  limits: ["adhesiveMargin"],
+  asks: "Does the bonding material stay below its temperature limit with its margin and hold time, and below the point where it flows; does it stand the vacuum, chemicals and light of every step between bond and debond, and all their heat together?",
+  limits: ["adhesiveMargin", "weightLossClear", "weightLoss", "heatingFrom"],
   judge,
 };

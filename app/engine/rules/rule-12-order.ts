@@ -1,10 +1,11 @@
 import type { StepState } from "../flow/walk.ts";
-import { allFilms } from "../flow/state.ts";
+import { allFilms, bondedFace } from "../flow/state.ts";
 import { inSentence } from "../in-sentence.ts";
-import { formatQuantity } from "../units/format.ts";
 import type { Outcome } from "../vocabulary.ts";
 import { againstUpperLimit, exceeds } from "./against-limit.ts";
 import type { Finding, Rule, RuleContext } from "./finding.ts";
+import { tapeHeatLimit } from "./tape.ts";
+import { celsius, micrometres as um, millimetres as mm } from "./words.ts";
 
 const TITLE = "Order of the steps";
 
@@ -14,9 +15,6 @@ interface Fault {
   reason: string;
   remedy: string;
 }
-
-const um = (value: number) => formatQuantity(value, "length", { unit: "µm" });
-const mm = (value: number) => formatQuantity(value, "length", { unit: "mm" });
 
 /** One thing that an order of steps can get wrong; null when this step does not. */
 type Check = (state: StepState, context: RuleContext) => Fault | null;
@@ -37,13 +35,21 @@ const debondsUnbonded: Check = ({ step, before }) =>
       }
     : null;
 
-const bondsTwice: Check = ({ step, before }) =>
-  step.kind === "bond" && before.bond
+/** A second carrier on the other face is a transfer; it comes before the first one goes. */
+const bondsTwice: Check = ({ step, before: { bond, transfer } }) => {
+  if (step.kind !== "bond" || !bond) return null;
+  if (transfer)
+    return {
+      reason: `It already has two carriers, ${bond.carrier.name} and ${transfer.carrier.name}.`,
+      remedy: "Debond the first one before another bond.",
+    };
+  return !step.bond || bondedFace(step.bond) === bondedFace(bond)
     ? {
-        reason: `It is already bonded to ${before.bond.carrier.name}.`,
-        remedy: "Debond first.",
+        reason: `It is already bonded to ${bond.carrier.name}.`,
+        remedy: "Debond first, or bond the other face for a transfer.",
       }
     : null;
+};
 
 const bondsToNothing: Check = ({ step }) =>
   step.kind === "bond" && !step.bond
@@ -107,17 +113,19 @@ const worksAfterDicing: Check = ({ step, before }) =>
     : null;
 
 /** The heat of a debond is judged by the debond rule. An edge ring has no tape under the wafer. */
-const heatsTape: Check = ({ step, after: { mount } }, { limits }) => {
+const heatsTape: Check = ({ step, after }, { limits }) => {
+  const { mount, tape } = after;
   if (!mount || mount === "edge ring" || step.kind === "debond") return null;
-  const limit = limits.tapeTemperature.value;
+  const limit = tapeHeatLimit(after, limits).value;
   const outcome = againstUpperLimit(step.peakTemperature, limit, 0, "do not run");
-  const vacuum = step.exposures.includes("vacuum") || step.exposures.includes("plasma");
+  const vacuum = (["vacuum", "plasma"] as const).some(
+    (exposure) => step.exposures.includes(exposure) && tape?.resistances?.[exposure]?.word !== "resists",
+  );
   if (outcome === "clear" && !vacuum) return null;
-  const at = formatQuantity(step.peakTemperature, "temperature", { unit: "°C", decimals: 0 });
-  const most = formatQuantity(limit, "temperature", { unit: "°C", decimals: 0 });
   const remedy = "Take the tape off before heat and vacuum, or plan a carrier for this step.";
   if (vacuum) return { reason: `It is on ${mount}, which does not go into vacuum or plasma.`, remedy };
-  return { outcome, reason: `It is on ${mount}, which takes ${most}; the step reaches ${at}.`, remedy };
+  const reason = `It is on ${mount}, which takes ${celsius(limit)}; the step reaches ${celsius(step.peakTemperature)}.`;
+  return { outcome, reason, remedy };
 };
 
 const trimsAfterGrinding: Check = ({ step, before }) =>
@@ -160,13 +168,16 @@ const doesNotFitTool: Check = ({ step, after }, { flow }) => {
   return null;
 };
 
-const carrierTooSmall: Check = ({ step }, { flow }) =>
-  step.kind === "bond" && step.bond && exceeds(flow.wafer.diameter, step.bond.carrier.diameter)
+/** What hangs over is allowed where the edge trim takes it off: the carrier rule says so. */
+const carrierTooSmall: Check = ({ step, before }, { flow }) => {
+  const held = flow.wafer.diameter - 2 * (before.trim?.width.value ?? 0);
+  return step.kind === "bond" && step.bond && exceeds(held, step.bond.carrier.diameter)
     ? {
         reason: `${step.bond.carrier.name} measures ${mm(step.bond.carrier.diameter)}, less than the ${mm(flow.wafer.diameter)} wafer: the edge would hang free.`,
         remedy: "Choose a carrier at least as large as the wafer.",
       }
     : null;
+};
 
 const CHECKS: Check[] = [
   growsSilicon,
@@ -216,7 +227,7 @@ function judge(context: RuleContext, state: StepState): Finding[] {
 export const orderRule: Rule = {
   number: 12,
   title: TITLE,
-  asks: "Can the steps be done in this order: nothing below zero, nothing unmounted diced, debond of what is bonded, clean after debond, tape off before heat or vacuum, trim before grind, and does the wafer or its carrier fit the tool?",
+  asks: "Can the steps be done in this order: nothing below zero, nothing unmounted diced, debond of what is bonded, clean after debond, tape off before heat or vacuum, trim before grind, a second carrier only on the other face, and does the wafer or its carrier fit the tool?",
   limits: ["tapeTemperature"],
   judge,
 };

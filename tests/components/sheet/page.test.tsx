@@ -45,7 +45,7 @@ describe("the printed sheet", () => {
   });
 
   it("says before the answer that a blocked flow must not be run", () => {
-    expect(words(sheet("Fulmar A"))).toMatch(/Do not run first at step 13 Needs carrier from step 10/);
+    expect(words(sheet("Fulmar A"))).toMatch(/Do not run first at step 12 Needs carrier from step 10/);
     expect(words(sheet("Petrel"))).not.toContain("Do not run");
   });
 

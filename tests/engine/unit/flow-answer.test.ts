@@ -3,7 +3,20 @@ import { answerSentences, supportSpans, tightestStep } from "#app/engine/flow/an
 import { assessFlow } from "#app/engine/flow/assess.ts";
 import type { FlowInput, StepInput } from "#app/engine/flow/model.ts";
 import { defaultLimits } from "#app/engine/rules/limits.ts";
-import { addition, exact, film, flow, frameStep, grindStep, step, tapeStep, tool, um } from "./flow-samples.ts";
+import {
+  addition,
+  exact,
+  film,
+  flow,
+  frameStep,
+  grindStep,
+  reliefStep,
+  step,
+  tapeStep,
+  tool,
+  trimStep,
+  um,
+} from "./flow-samples.ts";
 
 const limits = defaultLimits();
 const answer = (input: FlowInput) => answerSentences(input, assessFlow(input, limits));
@@ -23,16 +36,17 @@ describe("the answer in plain words", () => {
   });
 
   it("names the support, from which step to which", () => {
-    const input = flow([step(), tapeStep(), grindStep(100, 3), frameStep()]);
-    expect(answer(input)[0]).toBe("Clear as planned: tape or ring from step 3, grind, to step 4.");
+    const input = flow([trimStep(), tapeStep(), grindStep(100, 3), reliefStep(), frameStep()]);
+    expect(answer(input)[0]).toBe("Clear as planned: tape or ring from step 3, grind, to step 5.");
     expect(supportSpans(assessFlow(input, limits).steps)).toEqual([
       { support: "bare", from: 1, to: 2 },
-      { support: "tape or ring", from: 3, to: 4 },
+      { support: "tape or ring", from: 3, to: 5 },
     ]);
   });
 
   it("says 'at' when only one step needs it", () => {
-    expect(answer(flow([tapeStep(), grindStep(100, 3)]))[0]).toBe("Clear as planned: tape or ring at step 2, grind.");
+    // 170 µm: thin enough for tape, too thick for trim and relief to be asked.
+    expect(answer(flow([tapeStep(), grindStep(170, 3)]))[0]).toBe("Clear as planned: tape or ring at step 2, grind.");
   });
 
   it("opens with the cautions when it runs with them, and names the tightest warp", () => {
@@ -52,7 +66,7 @@ describe("the answer in plain words", () => {
   });
 
   it("says what is needed when the plan is weaker", () => {
-    const [support, cause] = answer(flow([tapeStep(), grindStep(100, 3), step()]));
+    const [support, cause] = answer(flow([tapeStep(), grindStep(170, 3), step()]));
     expect(support).toBe("Needs tape or ring from step 2, grind, to step 3.");
     expect(plain(cause)).toMatch(/^Step 3, Measure: /);
   });

@@ -1,4 +1,5 @@
 import { describe, expect, it } from "vitest";
+import type { StepInput } from "#app/engine/flow/model.ts";
 import { requiredAt } from "#app/engine/rules/rule-01-thickness.ts";
 import { defaultLimits } from "#app/engine/rules/limits.ts";
 import { walkFlow } from "#app/engine/flow/walk.ts";
@@ -100,5 +101,27 @@ describe("rule 1, thickness and support", () => {
     const [, ground] = walkFlow(input, defaultLimits()).steps;
     if (!ground) throw new Error("two steps were walked");
     expect(requiredAt({ flow: input, limits: defaultLimits() }, ground)?.support).toBe("tape or ring");
+  });
+
+  it("takes no edge ring for lithography, over which it stands", () => {
+    const ring = (kind: StepInput["kind"]) =>
+      outcomes(
+        flow([
+          tapeStep(),
+          grindStep(100, 0),
+          frameStep({ planned: "edge ring" }),
+          step({ kind, planned: "edge ring" }),
+        ]),
+        1,
+      );
+    expect(ring("pattern")).toEqual(["needs support"]);
+    expect(ring("plate")).toEqual(["clear"]);
+  });
+
+  it("takes thin silicon on tape only in line", () => {
+    const mounted = (inLine: boolean | null) =>
+      outcomes(flow([tapeStep(), grindStep(30, 0), frameStep({ inLine })]), 1);
+    expect(mounted(null)).toEqual(["clear"]);
+    expect(mounted(true)).toEqual(["clear"]);
   });
 });

@@ -3,6 +3,7 @@ import type { BondingMaterialInput, StepInput } from "#app/engine/flow/model.ts"
 import {
   adhesive,
   bondStep,
+  carrier,
   celsius,
   debondStep,
   exact,
@@ -50,13 +51,13 @@ describe("rule 6, bonding material and temperature", () => {
 
   it("stops where it flows in vacuum", () => {
     const inVacuum = onCarrier(150, thermoplastic, { exposures: ["vacuum"] });
-    expect(outcomes(inVacuum, 6)).toEqual(["clear", "do not run"]);
+    expect(outcomes(inVacuum, 6)).toEqual(["clear", "do not run", "clear"]);
     expect(findings(inVacuum, 6)[1]?.reason).toContain("in vacuum the thin wafer blisters or floats");
   });
 
   it("never says that a cross-linked material flows", () => {
     const found = findings(onCarrier(150, crossLinked, { exposures: ["vacuum"] }), 6);
-    expect(found.map(({ outcome }) => outcome)).toEqual(["clear", "clear"]);
+    expect(found.map(({ outcome }) => outcome)).toEqual(["clear", "clear", "clear"]);
     expect(found[1]?.reason).toContain("cross-linked, stays coupled and does not flow");
   });
 
@@ -68,5 +69,121 @@ describe("rule 6, bonding material and temperature", () => {
       step({ planned: "film frame", peakTemperature: celsius(300) }),
     ];
     expect([1, 2, 3, 4].map((at) => outcomes(flow(steps), 6, { at }).length)).toEqual([0, 1, 0, 0]);
+  });
+});
+
+const resists = { word: "resists" } as const;
+
+describe("rule 6, chemicals, vacuum and light", () => {
+  it.each([
+    { word: "resists", outcome: ["clear", "clear"] },
+    { word: "attacked", outcome: ["clear", "do not run"] },
+    { word: "unknown", outcome: ["clear", "cannot judge"] },
+    { word: null, outcome: ["clear", "cannot judge"] },
+  ] as const)("acid on a material that is stated $word: $outcome", ({ word, outcome }) => {
+    const resistances = word && { acid: { word } };
+    expect(outcomes(onCarrier(25, { resistances }, { exposures: ["acid"] }), 6)).toEqual(outcome);
+  });
+
+  it.each([
+    { minutes: 29, outcome: "clear" },
+    { minutes: 30, outcome: "caution" },
+    { minutes: 31, outcome: "do not run" },
+    { minutes: null, outcome: "cannot judge" },
+  ])("base for $minutes min on a material that stands 30 min: $outcome", ({ minutes, outcome }) => {
+    const resistances = { base: { ...resists, longest: 1800 } };
+    const holdTime = minutes === null ? null : minutes * 60;
+    expect(outcomes(onCarrier(25, { resistances }, { exposures: ["base"], holdTime }), 6)).toEqual(["clear", outcome]);
+  });
+
+  it("takes the time of the exposure before that of the step", () => {
+    const resistances = { base: { ...resists, longest: 1800 } };
+    const more = { exposures: ["base"] as StepInput["exposures"], holdTime: 3600, exposureTimes: { base: 600 } };
+    expect(outcomes(onCarrier(25, { resistances }, more), 6)).toEqual(["clear", "clear"]);
+  });
+
+  it.each([
+    { solvent: "ketone", outcome: "do not run" },
+    { solvent: "alcohol", outcome: "clear" },
+    { solvent: null, outcome: "caution" },
+  ] as const)("$solvent on a material that ketones attack: $outcome", ({ solvent, outcome }) => {
+    const resistances = { solvent: resists, attackedBy: ["ketone" as const] };
+    expect(outcomes(onCarrier(25, { resistances }, { exposures: ["solvent"], solvent }), 6)).toEqual([
+      "clear",
+      outcome,
+    ]);
+  });
+
+  const inVacuum = (peak: number, material: Partial<BondingMaterialInput>) =>
+    outcomes(onCarrier(peak, material, { exposures: ["vacuum"] }), 6).slice(2);
+
+  it.each([
+    { peak: 179, outcome: [] },
+    { peak: 180, outcome: ["caution"] },
+    { peak: 181, outcome: ["do not run"] },
+  ])("$peak °C in vacuum, where it takes 180 °C: $outcome", ({ peak, outcome }) => {
+    expect(inVacuum(peak, { vacuumTemperatureLimit: exact(celsius(180)) })).toEqual(outcome);
+  });
+
+  it.each([
+    { percent: 0.49, outcome: [] },
+    { percent: 0.5, outcome: ["caution"] },
+    { percent: 1, outcome: ["caution"] },
+    { percent: 1.1, outcome: ["do not run"] },
+  ])("a weight loss of $percent % in vacuum: $outcome", ({ percent, outcome }) => {
+    expect(inVacuum(100, { weightLoss: exact(percent / 100) })).toEqual(outcome);
+  });
+
+  it("asks for light only through glass, and for plasma only where its data say something", () => {
+    const lit = (onto = carrier()) =>
+      flow([
+        bondStep({}, adhesive({ resistances: null }), onto),
+        step({ planned: "carrier", exposures: ["ultraviolet light", "plasma"] }),
+      ]);
+    expect(outcomes(lit(), 6)).toEqual(["clear"]);
+    expect(outcomes(lit(carrier({ material: "glass", expansion: exact(3e-6) })), 6)).toEqual(["clear", "cannot judge"]);
+  });
+});
+
+describe("rule 6, heat added up", () => {
+  const heatedTimes = (count: number, material: Partial<BondingMaterialInput>, hold: number | null = 600, peak = 150) =>
+    flow([
+      bondStep({}, adhesive(material)),
+      ...Array.from({ length: count }, () =>
+        step({ kind: "cure", planned: "carrier", peakTemperature: celsius(peak), holdTime: hold }),
+      ),
+    ]);
+
+  it.each([
+    { count: 2, outcome: ["clear"] },
+    { count: 3, outcome: ["clear", "caution"] },
+    { count: 4, outcome: ["clear", "do not run"] },
+  ])("$count heatings of a material that stands 3: $outcome", ({ count, outcome }) => {
+    expect(outcomes(heatedTimes(count, { thermalCycles: exact(3) }), 6)).toEqual(outcome);
+  });
+
+  it("counts from 100 °C up, that included", () => {
+    expect(outcomes(heatedTimes(4, { thermalCycles: exact(3) }, 600, 99), 6)).toEqual(["clear"]);
+    expect(outcomes(heatedTimes(4, { thermalCycles: exact(3) }, 600, 100), 6)).toEqual(["clear", "do not run"]);
+  });
+
+  it.each([
+    { count: 2, outcome: ["clear"] },
+    { count: 3, outcome: ["clear", "caution"] },
+    { count: 4, outcome: ["clear", "do not run"] },
+  ])("$count times 10 min of a material that stands 30 min: $outcome", ({ count, outcome }) => {
+    expect(outcomes(heatedTimes(count, { thermalTime: exact(1800) }), 6)).toEqual(outcome);
+  });
+
+  it("cannot judge the time hot while a hold time is missing", () => {
+    expect(outcomes(heatedTimes(2, { thermalTime: exact(1800) }, null), 6)).toEqual(["clear", "cannot judge"]);
+  });
+
+  it.each([
+    { minutes: 10, outcome: ["caution"] },
+    { minutes: 11, outcome: ["caution", "do not run"] },
+  ])("$minutes min within the margin of a limit that holds for 10 min: $outcome", ({ minutes, outcome }) => {
+    const near = onCarrier(240, { limitTime: exact(600) }, { holdTime: minutes * 60 });
+    expect(outcomes(near, 6)).toEqual(outcome);
   });
 });

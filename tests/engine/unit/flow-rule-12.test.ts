@@ -187,4 +187,23 @@ describe("rule 12, order of the steps", () => {
   it("takes a thickness that is exactly what is there", () => {
     expect(reasons([step({ siliconAfter: exact(725 * 1e-6, um(3)) })])).toEqual([]);
   });
+
+  const onBack = (bond: StepInput): StepInput => ({ ...bond, bond: bond.bond && { ...bond.bond, face: "back" } });
+
+  it("allows a transfer: the other face is bonded before the first carrier goes", () => {
+    const steps = [
+      bondStep(),
+      step({ kind: "grind", planned: "carrier", siliconAfter: exact(um(50), um(0)) }),
+      onBack(bondStep()),
+      debondStep({ planned: "carrier" }),
+      step({ kind: "clean", planned: "carrier" }),
+    ];
+    for (const [index] of steps.entries())
+      expect(outcomes(flow(steps), 12, { at: index + 1 })).not.toContain("do not run");
+  });
+
+  it("stops a third carrier, and a second one on the same face", () => {
+    expect(reasons([bondStep(), onBack(bondStep()), onBack(bondStep())])[0]).toContain("already has two carriers");
+    expect(reasons([onBack(bondStep()), onBack(bondStep())])[0]).toContain("already bonded");
+  });
 });

@@ -8,6 +8,7 @@ import type {
   FlowInput,
   StepInput,
 } from "#app/engine/flow/model.ts";
+import type { Resistances } from "#app/engine/flow/handling-inputs.ts";
 import type { Measured } from "#app/engine/measured.ts";
 import type { Finding } from "#app/engine/rules/finding.ts";
 import { defaultLimits, type SiteLimits } from "#app/engine/rules/limits.ts";
@@ -65,9 +66,20 @@ export function carrier(overrides: Partial<CarrierInput> = {}): CarrierInput {
     poissonsRatio: exact(0.28),
     expansion: null,
     temperatureLimit: exact(celsius(400)),
+    thicknessVariation: exact(um(0.5)),
+    passesInfrared: true,
     ...overrides,
   };
 }
+
+const resists = { word: "resists" } as const;
+export const STANDS_ALL: Resistances = {
+  vacuum: resists,
+  solvent: resists,
+  acid: resists,
+  base: resists,
+  ultraviolet: resists,
+};
 
 export function adhesive(overrides: Partial<BondingMaterialInput> = {}): BondingMaterialInput {
   return {
@@ -83,6 +95,8 @@ export function adhesive(overrides: Partial<BondingMaterialInput> = {}): Bonding
     temperatureLimit: exact(celsius(250)),
     release: "laser through glass",
     releaseTemperature: exact(celsius(25)),
+    resistances: STANDS_ALL,
+    thicknessVariationShare: exact(0.02),
     ...overrides,
   };
 }
@@ -154,6 +168,13 @@ export function flow(
     steps,
   };
 }
+
+/** Edge trim and stress relief around a grind, for flows in which nothing but one thing is wrong. */
+export const trimStep = (overrides: Partial<StepInput> = {}): StepInput =>
+  step({ kind: "edge trim", title: "Trim", edgeTrim: { width: exact(7e-4), depth: exact(um(200)) }, ...overrides });
+
+export const reliefStep = (overrides: Partial<StepInput> = {}): StepInput =>
+  step({ kind: "stress relief", title: "Relieve", planned: "grinding tape", ...overrides });
 
 /** What one rule finds at one step (from 1; by default the last). */
 export function findings(

@@ -12,7 +12,7 @@ const plain = (text: string | undefined) => text?.replaceAll("\u00A0", " ");
 describe("the step to look at first", () => {
   it("is the one that stops the flow", () => {
     expect(firstStep(demoResult("Petrel, glass 3.3 ppm"))).toBe(10);
-    expect(firstStep(demoResult("Fulmar A"))).toBe(13);
+    expect(firstStep(demoResult("Fulmar A"))).toBe(12);
   });
 
   it("is the one nearest its tool's limit when nothing stops it, cautions or not", () => {
@@ -39,7 +39,7 @@ describe("a step in full", () => {
     expect(lies.working).toBe(`/assessments/${HEAD.id}/working?step=12&shape=loaded`);
     expect(released).toBeNull();
     expect(open).toEqual([]);
-    expect(clear.map(({ rule }) => rule)).toEqual([1, 2]);
+    expect(clear.map(({ rule }) => rule)).toEqual([1, 2, 4, 10]);
   });
 
   it("says whose side is up where the standard bow is not the one that is seen", () => {
@@ -58,7 +58,7 @@ describe("a step in full", () => {
 
   it("puts what is not clear first, worst first, with figures, limit with its source, and remedy", () => {
     const { open } = selected("Fulmar A", 13);
-    expect(open.map(({ outcome }) => outcome)).toEqual(["do not run", "caution"]);
+    expect(open.map(({ outcome }) => outcome)).toEqual(["do not run", "do not run", "caution"]);
     const [warp] = selected("Petrel, glass 3.3 ppm", 10).open;
     expect(warp).toMatchObject({ rule: 2, outcome: "do not run" });
     expect(warp?.figures[0]?.working).toMatch(/^\/assessments\/.*\/working\?finding=\d+&figure=0$/);

@@ -57,7 +57,7 @@ describe("rows of an assessment", () => {
 
   it("say in a few words what is not clear, and how much more there is", () => {
     expect(row("Petrel", 15).note?.replaceAll("\u00A0", " ")).toMatch(/^rule 2, 8\d % of limit$/);
-    expect(row("Fulmar A", 13)).toMatchObject({ outcome: "do not run", more: 1 });
+    expect(row("Fulmar A", 13)).toMatchObject({ outcome: "do not run", more: 2 });
     expect(row("Fulmar A", 13).note).toContain("bonding material");
     expect(row("Tern", 3)).toMatchObject({ outcome: "clear", note: null, more: 0 });
   });

@@ -19,7 +19,7 @@ describe("an assessment for its page", () => {
 
   it("says where the verdict arises, and nothing where all is clear", () => {
     expect(view("Tern")).toMatchObject({ outcome: "clear", where: null });
-    expect(view("Fulmar A")).toMatchObject({ outcome: "do not run", where: "first at step 13" });
+    expect(view("Fulmar A")).toMatchObject({ outcome: "do not run", where: "first at step 12" });
   });
 
   it("puts four figures beside the answer: tightest, its limit, thinnest, assumed", () => {

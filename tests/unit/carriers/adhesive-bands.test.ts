@@ -24,7 +24,9 @@ function judged(material: AdhesiveTemperatures, peakTemperature: number, exposur
       flows: material.flows,
       softening: material.softening === null ? null : stated(material.softening),
       temperatureLimit: stated(material.limit),
+      resistances: { vacuum: { word: "resists" } },
     },
+    carrier: { material: "glass" },
   };
   const state = { number: 1, step: { kind: "cure", peakTemperature, exposures }, before: { bond } };
   const findings = adhesiveRule.judge({ limits } as RuleContext, state as unknown as StepState);

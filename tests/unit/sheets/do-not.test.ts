@@ -40,7 +40,9 @@ describe("what not to do", () => {
       "Do not heat above 280 °C: the bond",
       "Do not trim after grinding",
     ]);
-    expect(lines(demoResult("Fulmar A"))[1]).toContain("Do not put into vacuum above 120 °C: the bond flows");
+    const fulmar = demoResult("Fulmar A");
+    const runs = { ...fulmar, findings: fulmar.findings.filter(({ outcome }) => outcome !== "do not run") };
+    expect(lines(runs)[1]).toContain("Do not put into vacuum above 120 °C: the bond flows");
   });
 
   it("begins with what the assessment stops, the same reason said once", () => {
@@ -50,7 +52,10 @@ describe("what not to do", () => {
     expect(lines(demoResult("Petrel, glass 7.2 ppm"))[1]?.[0]).toBe(
       "Do not run steps 10 to 17: it bows more than the tool takes",
     );
-    expect(lines(demoResult("Fulmar A"))[1]?.[0]).toBe("Do not run steps 13 and 18: it is too hot for the bond");
+    expect(lines(demoResult("Fulmar A"))[1]?.slice(0, 2)).toEqual([
+      "Do not run step 12: its thickness varies too much, or its bumps stand out",
+      "Do not run steps 13 and 18: it is too hot for the bond",
+    ]);
     expect(lines(demoResult("Fulmar A"))[2]?.[0]).toBe("Do not run step 21: it is too hot for the tape");
   });
 

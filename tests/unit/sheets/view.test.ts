@@ -24,7 +24,7 @@ describe("the page for hands", () => {
     );
     expect(view("Tern").blocked).toBe(false);
     expect(view("Petrel").blocked).toBe(false);
-    expect(view("Fulmar A")).toMatchObject({ blocked: true, outcome: "do not run", where: "first at step 13" });
+    expect(view("Fulmar A")).toMatchObject({ blocked: true, outcome: "do not run", where: "first at step 12" });
   });
 
   it("says the support over all steps in words", () => {

@@ -1,0 +1,91 @@
+import { PRACTICE, type LimitDefinition } from "./limit-definition.ts";
+
+const HOUR = 3600;
+const DAY = 24 * HOUR;
+
+/** Limits of bonding materials, films, thinning, records and clocks: rules 6 and 8 to 17. */
+export const PROCESS_LIMITS = {
+  adhesiveMargin: {
+    title: "Margin below a bonding material's temperature limit",
+    value: 20,
+    unit: "K",
+    temperatureDifference: true,
+    rule: 6,
+    source: PRACTICE,
+  },
+  weightLossClear: { title: "Weight loss in vacuum: clear below", value: 0.005, unit: "1", rule: 6, source: PRACTICE },
+  weightLoss: { title: "Weight loss in vacuum: up to", value: 0.01, unit: "1", rule: 6, source: PRACTICE },
+  heatingFrom: {
+    title: "A step counts as a heating of the bond from",
+    value: 373.15,
+    unit: "K",
+    temperaturePoint: true,
+    rule: 6,
+    source: PRACTICE,
+  },
+  solderMargin: {
+    title: "Margin below the melting of solder at a debond",
+    value: 20,
+    unit: "K",
+    temperatureDifference: true,
+    rule: 8,
+    source: PRACTICE,
+  },
+  coverShare: {
+    title: "Bumps take at most this share of what covers them",
+    value: 0.7,
+    unit: "1",
+    rule: 9,
+    source: PRACTICE,
+  },
+  coverLeft: { title: "Left over the bumps, at least", value: 5e-6, unit: "m", rule: 9, source: PRACTICE },
+  coverLeftClear: { title: "Left over the bumps: clear above", value: 10e-6, unit: "m", rule: 9, source: PRACTICE },
+  trimBelow: { title: "Edge trim needed below", value: 100e-6, unit: "m", rule: 10, source: PRACTICE },
+  trimAdvisedBelow: { title: "Edge trim advised up to", value: 150e-6, unit: "m", rule: 10, source: PRACTICE },
+  trimReserve: { title: "Trim deeper than the final silicon by", value: 30e-6, unit: "m", rule: 10, source: PRACTICE },
+  reliefBelow: { title: "Stress relief needed below", value: 100e-6, unit: "m", rule: 10, source: PRACTICE },
+  reliefAdvisedBelow: { title: "Stress relief advised up to", value: 150e-6, unit: "m", rule: 10, source: PRACTICE },
+  mostReflows: {
+    title: "Times that a solder may melt",
+    value: 3,
+    unit: "1",
+    count: true,
+    rule: 11,
+    source: PRACTICE,
+  },
+  recordAge: { title: "A stress record is old from", value: 365.25 * DAY, unit: "s", rule: 13, source: PRACTICE },
+  recordThickness: {
+    title: "Film thickness may differ from that of its record by",
+    value: 0.2,
+    unit: "1",
+    rule: 13,
+    source: PRACTICE,
+  },
+  stoneyWithin: {
+    title: "The thin-film formula counts as good within",
+    value: 0.05,
+    unit: "1",
+    rule: 14,
+    source: PRACTICE,
+  },
+  reliefWithin: { title: "Grind to stress relief within", value: DAY, unit: "s", rule: 17, source: PRACTICE },
+  grindWithin: { title: "Bond to grind within", value: 7 * DAY, unit: "s", rule: 17, source: PRACTICE },
+  cleanWithin: { title: "Debond to clean within", value: DAY, unit: "s", rule: 17, source: PRACTICE },
+  tapeWithin: { title: "On tape for at most", value: 7 * DAY, unit: "s", rule: 17, source: PRACTICE },
+  dryFor: { title: "A bake keeps it dry for", value: 4 * HOUR, unit: "s", rule: 17, source: PRACTICE },
+  dryFrom: {
+    title: "A step counts as a bake from",
+    value: 373.15,
+    unit: "K",
+    temperaturePoint: true,
+    rule: 17,
+    source: PRACTICE,
+  },
+  clockMargin: {
+    title: "Caution from this share of a red line below it",
+    value: 0.2,
+    unit: "1",
+    rule: 17,
+    source: PRACTICE,
+  },
+} as const satisfies Record<string, LimitDefinition>;

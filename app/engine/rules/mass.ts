@@ -1,0 +1,27 @@
+import type { WaferState } from "../flow/state.ts";
+import { SILICON_DENSITY } from "../silicon/density.ts";
+
+/** Density of a bonding material, kg/m³, common practice, no source: it weighs a fiftieth of a pair. */
+const BONDING_MATERIAL_DENSITY = 1100;
+
+/** Density taken for glass whose own is not given, kg/m³: upper end of carrier glasses, common practice, no source. */
+export const USUAL_GLASS_DENSITY = 2500;
+
+/** Density of a bond's carrier, kg/m³; null for glass that has none given. */
+export function carrierDensity(bond: NonNullable<WaferState["bond"]>): number | null {
+  if (bond.carrier.density) return bond.carrier.density.value;
+  return bond.carrier.material === "silicon" ? SILICON_DENSITY : null;
+}
+
+/** Mass per area of a wafer with its carriers, kg/m², films left out (below 1 %); `glass` stands for an unknown density. */
+export function arealMass({ silicon, bond, transfer }: WaferState, glass: number): number {
+  return [bond, transfer].reduce(
+    (sum, pair) =>
+      pair === null
+        ? sum
+        : sum +
+          pair.carrier.thickness.value * (carrierDensity(pair) ?? glass) +
+          pair.thickness.value * BONDING_MATERIAL_DENSITY,
+    silicon.value * SILICON_DENSITY,
+  );
+}
