@@ -9,6 +9,7 @@ import type { AssessmentResult, BondResult, StepResult } from "#app/schemas/asse
 import { celsius, figureText, micrometres } from "./assessment-figure.ts";
 import { bySeverity, figureWorkingPath } from "./assessment-finding.ts";
 import { assessmentNumber } from "./assessment-number.ts";
+import { revisionLetters } from "./assessment-revision.ts";
 import { selectedStep, stepAskedFor, type SelectedStep } from "./assessment-selected.ts";
 import { isRolled } from "./lying-as.ts";
 import { stepRows, type StepRow } from "./assessment-steps.ts";
@@ -106,7 +107,7 @@ export function titleBlock(head: AssessmentHead, documentType: string, page: str
     checked: "not yet",
     released: "not yet",
     number: assessmentNumber(head.program.slug, head.documentNumber),
-    revision: "–",
+    revision: revisionLetters(head.number),
     status: "Draft",
     date: head.createdAt.slice(0, 10),
     language: "en",
