@@ -14,11 +14,12 @@ export interface TodayGroups {
 /**
  * Parts flows by what they wait for, each group oldest first: not assessed yet; changed since the newest assessment, which then
  * decides nothing any more; assessed and not clear. What is clear waits for nothing.
+ * @param outOfDate ids of the assessments that rest on inputs that have changed since
  */
-export function groupFlows(flows: readonly TodayFlow[]): TodayGroups {
+export function groupFlows(flows: readonly TodayFlow[], outOfDate: ReadonlySet<string>): TodayGroups {
   const assessed = flows.filter((flow): flow is Assessed => flow.newest !== null);
-  const stale = assessed.filter(({ updatedAt, newest }) => updatedAt > newest.at);
-  const current = assessed.filter(({ updatedAt, newest }) => updatedAt <= newest.at);
+  const stale = assessed.filter(({ newest }) => outOfDate.has(newest.id));
+  const current = assessed.filter(({ newest }) => !outOfDate.has(newest.id));
   return {
     decisions: group(
       current.filter(({ newest }) => newest.outcome !== "clear"),

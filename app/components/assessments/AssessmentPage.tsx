@@ -5,16 +5,25 @@ import { chooseExaggeration } from "#app/components/drawings/choose-exaggeration
 import { StepStrip } from "#app/components/drawings/StepStrip.tsx";
 import type { AnswerFigureView, AssessmentView } from "#app/lib/assessment-view.ts";
 import { stepPath } from "#app/lib/step-path.ts";
+import type { OutOfDate } from "#app/schemas/assessment-changes.ts";
 import { AssessmentActions } from "./AssessmentActions.tsx";
 import { AssessmentTop, type NotComputable } from "./AssessmentTop.tsx";
+import { OutOfDateSection } from "./OutOfDateSection.tsx";
 import { SidePane } from "./SidePane.tsx";
 import { StepLink } from "./StepLink.tsx";
 import { StepList } from "./StepList.tsx";
 import { StepTable } from "./StepTable.tsx";
 import { useStepSelection } from "./use-step-selection.ts";
 
+interface Props {
+  view: AssessmentView;
+  /** what has changed since it was run; null when it is up to date */
+  changed: OutOfDate | null;
+  refused: NotComputable | undefined;
+}
+
 /** An assessment: the answer, all steps on one axis, the steps one by one, and what follows from them. */
-export function AssessmentPage({ view, refused }: { view: AssessmentView; refused: NotComputable | undefined }) {
+export function AssessmentPage({ view, changed, refused }: Props) {
   const { head, diameter, outcome, where, sentences, figures, steps, selected } = view;
   const select = useStepSelection();
   const bows = steps.flatMap(({ bow }) => (bow.shape.kind === "bowed" ? [bow.shape.bow] : []));
@@ -25,6 +34,7 @@ export function AssessmentPage({ view, refused }: { view: AssessmentView; refuse
       <AssessmentTop head={head} refused={refused} />
       <article className="frame max-tablet:-mx-4 max-tablet:border-x-0">
         <AnswerLine outcome={outcome} where={where ?? undefined} sentences={sentences} figures={figures.map(linked)} />
+        {head.outOfDate ? <OutOfDateSection head={head} changed={changed} /> : null}
         <div className="border-t border-ink max-tablet:hidden">
           <StepStrip
             steps={steps.map((step) => ({

@@ -2,6 +2,7 @@ import { describe, expect, it } from "vitest";
 import { createRoutesStub } from "react-router";
 import { AssessmentPage } from "#app/components/assessments/AssessmentPage.tsx";
 import { assessmentView, type AssessmentHead } from "#app/lib/assessment-view.ts";
+import type { OutOfDate } from "#app/schemas/assessment-changes.ts";
 import { attributes, render, words } from "#tests/components/drawings/render.ts";
 import { demoResult, HEAD } from "#tests/fixtures/demo-assessment.ts";
 
@@ -9,13 +10,16 @@ interface Shown {
   flow?: string;
   step?: string;
   head?: Partial<AssessmentHead>;
+  changed?: OutOfDate;
   refused?: { step: number | null; reason: string };
 }
 
 /** The page as the server sends it. */
-function page({ flow = "Petrel", step, head, refused }: Shown = {}): string {
+function page({ flow = "Petrel", step, head, changed, refused }: Shown = {}): string {
   const view = assessmentView({ ...HEAD, ...head }, demoResult(flow), step ?? null);
-  const Stub = createRoutesStub([{ path: "/", Component: () => <AssessmentPage view={view} refused={refused} /> }]);
+  const Stub = createRoutesStub([
+    { path: "/", Component: () => <AssessmentPage view={view} changed={changed ?? null} refused={refused} /> },
+  ]);
   return render(<Stub initialEntries={["/"]} />);
 }
 
@@ -61,7 +65,7 @@ describe("the assessment page", () => {
 
   it("says when it is out of date, and makes running again the one filled button", () => {
     const markup = page({ head: { outOfDate: true } });
-    expect(words(markup)).toContain("Out of date: the flow, or something that it uses, has changed since");
+    expect(words(markup)).toContain("Out of date: the flow, or something that it uses, has changed since 2026-12-01");
     expect(count(markup, "btn-primary")).toBe(1);
     expect(markup).toMatch(/btn-primary[^>]*>Run again/);
     // A technician can only read that it is old.
