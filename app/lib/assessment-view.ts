@@ -14,6 +14,7 @@ import { selectedStep, stepAskedFor, type SelectedStep } from "./assessment-sele
 import { isRolled } from "./lying-as.ts";
 import { stepRows, type StepRow } from "./assessment-steps.ts";
 import { SITE_NAME } from "./site.ts";
+import { warpCourse, type CourseStep } from "./warp-course.ts";
 
 /** What a stored assessment says of itself, beside its result. */
 export interface AssessmentHead {
@@ -67,6 +68,8 @@ export interface AssessmentView {
   figures: AnswerFigureView[];
   steps: StepRow[];
   selected: SelectedStep | null;
+  /** how it lies along the flow, for the chart */
+  course: CourseStep[];
   remedies: RemedyView[];
   assumed: AssumedInput[];
   inputs: number;
@@ -89,6 +92,7 @@ export function assessmentView(head: AssessmentHead, result: AssessmentResult, a
     figures: answerFigures(head.id, result),
     steps: stepRows(result),
     selected: selectedStep(head.id, result, stepAskedFor(result, asked)),
+    course: warpCourse(result),
     remedies: remedies(result.findings),
     assumed: result.assumed,
     inputs: result.inputs,

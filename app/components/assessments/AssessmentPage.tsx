@@ -8,6 +8,7 @@ import { stepPath } from "#app/lib/step-path.ts";
 import type { OutOfDate } from "#app/schemas/assessment-changes.ts";
 import { AssessmentActions } from "./AssessmentActions.tsx";
 import { AssessmentTop, type NotComputable } from "./AssessmentTop.tsx";
+import { FlowCourse } from "./FlowCourse.tsx";
 import { OutOfDateSection } from "./OutOfDateSection.tsx";
 import { SidePane } from "./SidePane.tsx";
 import { StepLink } from "./StepLink.tsx";
@@ -59,6 +60,7 @@ export function AssessmentPage({ view, changed, refused }: Props) {
           </section>
           <SidePane view={view} />
         </div>
+        <FlowCourse course={view.course} selected={selected?.number} />
       </article>
       <section className="mt-6" aria-labelledby="cautions">
         <h2 id="cautions" className="mb-2 font-semibold">
