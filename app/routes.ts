@@ -31,6 +31,7 @@ export default [
     ...prefix("assessments/:assessmentId", [
       index("routes/_app/assessments/assessment.tsx"),
       route("working", "routes/_app/assessments/working.tsx"),
+      route("compare", "routes/_app/assessments/compare.tsx"),
     ]),
     ...prefix("carriers", [
       index("routes/_app/carriers/index.tsx"),

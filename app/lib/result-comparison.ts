@@ -1,5 +1,5 @@
 import { tightestStep } from "#app/engine/flow/answer.ts";
-import type { Outcome } from "#app/engine/vocabulary.ts";
+import { supportClassOf, supportRank, type Outcome, type SupportClass } from "#app/engine/vocabulary.ts";
 import type { Movement } from "#app/schemas/assessment-changes.ts";
 import type { AssessmentResult, ShapeResult, StepResult } from "#app/schemas/assessment-result.ts";
 import { alignSteps, type Pair } from "./align.ts";
@@ -21,7 +21,11 @@ export interface AnswerSummary {
 export type ComparedStep = Pick<
   StepRow,
   "number" | "title" | "heldBy" | "required" | "outcome" | "note" | "warpText" | "liesAs"
-> & { silicon: string };
+> & {
+  silicon: string;
+  /** what it needs, where what is planned is less */
+  needs: SupportClass | null;
+};
 
 /** A step of both, or of one of the two. */
 export interface ComparisonRow {
@@ -107,8 +111,20 @@ function comparisonRow(
 
 function comparedStep(row: StepRow | null | undefined): ComparedStep | null {
   if (!row) return null;
-  const { number, title, heldBy, required, outcome, note, warpText, liesAs, silicon } = row;
-  return { number, title, heldBy, required, outcome, note, warpText, liesAs, silicon: silicon.text };
+  const { number, title, heldBy, required, outcome, note, warpText, liesAs, silicon, bow } = row;
+  const short = supportRank(required) > supportRank(supportClassOf(bow.holding));
+  return {
+    number,
+    title,
+    heldBy,
+    required,
+    outcome,
+    note,
+    warpText,
+    liesAs,
+    silicon: silicon.text,
+    needs: short ? required : null,
+  };
 }
 
 /** '+12', '−3.4', '0', µm. A wafer that has rolled up has an edge lift and no warp to compare. */

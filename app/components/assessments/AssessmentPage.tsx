@@ -72,6 +72,11 @@ export function AssessmentPage({ view, changed, refused }: Props) {
         Engine {head.engineVersion}, inputs of {head.createdAt.slice(0, 16).replace("T", " ")} UTC, fingerprint{" "}
         {head.inputHash.slice(0, 12)}. ± is the expanded uncertainty, k = 2, from the tolerances given.
       </p>
+      <p className="screen-only mt-2 tablet:hidden">
+        <Link to={`/assessments/${head.id}/compare`} className="link">
+          Compare with another assessment
+        </Link>
+      </p>
       <div className="screen-only sticky bottom-0 z-10 -mx-4 mt-4 flex gap-2 border-t border-ink bg-surface px-4 py-2 tablet:hidden">
         <AssessmentActions head={head} phone />
       </div>

@@ -1,6 +1,5 @@
 import { FindingTag } from "#app/components/drawings/FindingTag.tsx";
 import { noBreak } from "#app/components/drawings/no-break.ts";
-import { SUPPORT_SIGNS } from "#app/components/drawings/severity.ts";
 import type { ComparedStep, ComparisonRow } from "#app/lib/result-comparison.ts";
 
 interface Props {
@@ -80,7 +79,7 @@ const warpOf = (step: ComparedStep | null) => (step ? step.warpText : "–");
 
 function Side({ step, other }: { step: ComparedStep | null; other: ComparedStep | null }) {
   if (!step) return <span className="text-quiet">no such step</span>;
-  const { outcome, note, required, silicon, heldBy, liesAs } = step;
+  const { outcome, note, required, needs, silicon, heldBy, liesAs } = step;
   const support = other && (other.required !== required || other.heldBy !== heldBy);
   return (
     <>
@@ -89,7 +88,7 @@ function Side({ step, other }: { step: ComparedStep | null; other: ComparedStep 
         <span className={other && other.silicon !== silicon ? "font-semibold text-ink" : ""}>{silicon}&nbsp;µm</span>,{" "}
         <span className={support ? "font-semibold text-ink" : ""}>
           {heldBy.toLowerCase()}
-          {SUPPORT_SIGNS[required].word === heldBy ? "" : `, needs ${required}`}
+          {needs === null ? "" : `, needs ${needs}`}
         </span>
         , {liesAs}
       </span>
