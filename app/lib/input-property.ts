@@ -56,6 +56,11 @@ const TABLES: Partial<Record<InputRecord, Record<string, InputProperty>>> = {
   equipment: TOOL_PROPERTIES,
 };
 
+/** The described properties of a kind of library record, in the order of its own table. */
+export function describedProperties(kind: InputRecord): [name: string, property: InputProperty][] {
+  return Object.entries(TABLES[kind] ?? {});
+}
+
 /** The words for a property of a record; one that nobody has described is called by its own name, in words. */
 export function inputProperty(kind: InputRecord, name: string): InputProperty {
   return TABLES[kind]?.[name] ?? OTHER[name] ?? { label: inWords(name) };

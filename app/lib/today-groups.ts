@@ -1,4 +1,5 @@
 import type { TodayFlow, TodayGroup } from "#app/schemas/today.ts";
+import { count } from "./count-words.ts";
 
 /** Rows that a group shows; the rest is counted and one link away. */
 export const SHOWN = 6;
@@ -37,23 +38,6 @@ function group<Row>(rows: Row[], since: (row: Row) => string): TodayGroup<Row> {
   const sorted = rows.toSorted((a, b) => since(a).localeCompare(since(b)));
   return { rows: sorted.slice(0, SHOWN), total: rows.length };
 }
-
-const COUNTS = [
-  "no",
-  "one",
-  "two",
-  "three",
-  "four",
-  "five",
-  "six",
-  "seven",
-  "eight",
-  "nine",
-  "ten",
-  "eleven",
-  "twelve",
-];
-const count = (number: number) => COUNTS[number] ?? String(number);
 
 /** What waits, in one sentence: 'Two flows need a decision and one assessment is out of date.' */
 export function headline({ decisions, outOfDate, notAssessed }: Record<keyof TodayGroups, { total: number }>): string {

@@ -67,6 +67,11 @@ export function SheetList({ page, programs }: { page: ListPage<AssessmentRow> | 
       <PageHead
         title="Sheets"
         remark={`${page.total} ${searched ? "found" : "to print"}, all drafts: none is released`}
+        actions={
+          <Link to="/assessments/change-request" className="btn">
+            What would change?
+          </Link>
+        }
       />
       <ListHead
         what="flows"
