@@ -1,3 +1,4 @@
+import { setImmediate } from "node:timers/promises";
 import type { EntityManager } from "@mikro-orm/postgresql";
 import { Flow } from "#app/db/entities/flow.ts";
 import { ENGINE_VERSION } from "#app/engine/version.ts";
@@ -23,7 +24,7 @@ import { inputHash } from "./input-hash.server.ts";
 import { presentFlows, type PresentFlow } from "./present-inputs.server.ts";
 
 /** Flows computed for one question; beyond it the reader is asked to choose a program. */
-const COMPUTED = 25;
+const COMPUTED = 15;
 
 const TABLES: Record<LibrarySubject, string> = {
   film: "film",
@@ -80,7 +81,12 @@ export async function changeReach(
       em,
       shown.map(({ now }) => now.flow.id),
     );
-    const touched = shown.map(({ now, then }) => touchedFlow(now, then, newest.get(now.flow.id) ?? null));
+    const touched: TouchedFlow[] = [];
+    for (const { now, then } of shown) {
+      // Others are served between two computations.
+      await setImmediate();
+      touched.push(touchedFlow(now, then, newest.get(now.flow.id) ?? null));
+    }
     return {
       flows: flows.length,
       touched: touched.toSorted((a, b) => Number(moves(b)) - Number(moves(a))),
