@@ -6,7 +6,10 @@ export default [
   layout("routes/_public/layout.tsx", [route("sign-in", "routes/_public/sign-in.tsx")]),
   route("sign-out", "routes/_auth/sign-out.ts"),
   ...prefix("api/v1", [route("estimates", "routes/api.v1/estimates.ts")]),
-  layout("routes/_print/layout.tsx", [route("sheets/:assessmentId", "routes/_print/sheet.tsx")]),
+  layout("routes/_print/layout.tsx", [
+    route("sheets/:assessmentId", "routes/_print/sheet.tsx"),
+    route("assessments/change-request/print", "routes/_print/change-request.tsx"),
+  ]),
   layout("routes/_app/layout.tsx", [
     index("routes/_app/today.tsx"),
     ...prefix("films", [
@@ -28,9 +31,11 @@ export default [
       route(":flowId/steps/new", "routes/_app/flows/new-step.tsx"),
       route(":flowId/steps/:stepId", "routes/_app/flows/step.tsx"),
     ]),
+    route("assessments/change-request", "routes/_app/assessments/change-request.tsx"),
     ...prefix("assessments/:assessmentId", [
       index("routes/_app/assessments/assessment.tsx"),
       route("working", "routes/_app/assessments/working.tsx"),
+      route("compare", "routes/_app/assessments/compare.tsx"),
     ]),
     ...prefix("carriers", [
       index("routes/_app/carriers/index.tsx"),

@@ -9,10 +9,12 @@ import type { AssessmentResult, BondResult, StepResult } from "#app/schemas/asse
 import { celsius, figureText, micrometres } from "./assessment-figure.ts";
 import { bySeverity, figureWorkingPath } from "./assessment-finding.ts";
 import { assessmentNumber } from "./assessment-number.ts";
+import { revisionLetters } from "./assessment-revision.ts";
 import { selectedStep, stepAskedFor, type SelectedStep } from "./assessment-selected.ts";
 import { isRolled } from "./lying-as.ts";
 import { stepRows, type StepRow } from "./assessment-steps.ts";
 import { SITE_NAME } from "./site.ts";
+import { warpCourse, type CourseStep } from "./warp-course.ts";
 
 /** What a stored assessment says of itself, beside its result. */
 export interface AssessmentHead {
@@ -66,6 +68,8 @@ export interface AssessmentView {
   figures: AnswerFigureView[];
   steps: StepRow[];
   selected: SelectedStep | null;
+  /** how it lies along the flow, for the chart */
+  course: CourseStep[];
   remedies: RemedyView[];
   assumed: AssumedInput[];
   inputs: number;
@@ -88,6 +92,7 @@ export function assessmentView(head: AssessmentHead, result: AssessmentResult, a
     figures: answerFigures(head.id, result),
     steps: stepRows(result),
     selected: selectedStep(head.id, result, stepAskedFor(result, asked)),
+    course: warpCourse(result),
     remedies: remedies(result.findings),
     assumed: result.assumed,
     inputs: result.inputs,
@@ -106,7 +111,7 @@ export function titleBlock(head: AssessmentHead, documentType: string, page: str
     checked: "not yet",
     released: "not yet",
     number: assessmentNumber(head.program.slug, head.documentNumber),
-    revision: "–",
+    revision: revisionLetters(head.number),
     status: "Draft",
     date: head.createdAt.slice(0, 10),
     language: "en",

@@ -23,6 +23,7 @@ const ANSWER = { size: 16 / 0.75, line: 20.5 * 0.3528 };
  */
 const HEIGHTS = {
   identity: 11.8,
+  changedSince: 5,
   answer: 4,
   blocked: 8,
   tableHead: 5.3,
@@ -40,7 +41,8 @@ const HEIGHTS = {
 export function sheetPages(sheet: SheetView, paper: Paper): SheetPagePlan[] {
   const { width, height } = PAPERS[paper];
   const frame = width - FILING_MARGIN - MARGIN;
-  const room = height - 2 * MARGIN - HEIGHTS.identity - HEIGHTS.titleBlock - HEIGHTS.safety;
+  const identity = HEIGHTS.identity + (sheet.changedSince === null ? 0 : HEIGHTS.changedSince);
+  const room = height - 2 * MARGIN - identity - HEIGHTS.titleBlock - HEIGHTS.safety;
   let left = room - answerHeight(sheet, frame) - barHeight(sheet, frame) - HEIGHTS.tableHead;
   let page: SheetPagePlan = { groups: [], foot: false };
   const pages = [page];

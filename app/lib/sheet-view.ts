@@ -13,6 +13,7 @@ import {
 import type { AssessmentResult, BondResult, ShapeResult, StepResult } from "#app/schemas/assessment-result.ts";
 import { celsius } from "./assessment-figure.ts";
 import { assessmentNumber } from "./assessment-number.ts";
+import { revisionLetters } from "./assessment-revision.ts";
 import { isRolled, lyingAs } from "./lying-as.ts";
 import { sentenceCase } from "./assessment-steps.ts";
 import { titleBlock, type AssessmentHead } from "./assessment-view.ts";
@@ -52,6 +53,7 @@ export interface SheetBondView {
 export interface SheetView {
   assessmentId: string;
   number: string;
+  revision: string;
   program: string;
   flow: string;
   outcome: Outcome;
@@ -66,6 +68,8 @@ export interface SheetView {
     numbers: number[];
     label: string;
   };
+  /** when it was assessed, if the flow or something that it uses has changed since; else null */
+  changedSince: string | null;
   diameter: number;
   groups: SheetGroupView[];
   bonds: SheetBondView[];
@@ -81,6 +85,7 @@ export function sheetView(head: AssessmentHead, result: AssessmentResult): Sheet
   return {
     assessmentId: head.id,
     number: assessmentNumber(head.program.slug, head.documentNumber),
+    revision: revisionLetters(head.number),
     program: head.program.name,
     flow: head.flow.name,
     outcome: verdict.outcome,
@@ -94,6 +99,7 @@ export function sheetView(head: AssessmentHead, result: AssessmentResult): Sheet
       numbers: steps.map(({ number }) => number),
       label: supportInWords(steps),
     },
+    changedSince: head.outOfDate ? head.createdAt.slice(0, 10) : null,
     diameter: result.wafer.diameter,
     groups: groups.map((group, index) => groupView(group, groups[index - 1]?.steps.at(-1) ?? null, result)),
     bonds: bonds.map((bond) => bondView(bond, steps)),

@@ -1,4 +1,5 @@
 import type { TodayFlow, TodayGroup } from "#app/schemas/today.ts";
+import { count } from "./count-words.ts";
 
 /** Rows that a group shows; the rest is counted and one link away. */
 export const SHOWN = 6;
@@ -14,11 +15,12 @@ export interface TodayGroups {
 /**
  * Parts flows by what they wait for, each group oldest first: not assessed yet; changed since the newest assessment, which then
  * decides nothing any more; assessed and not clear. What is clear waits for nothing.
+ * @param outOfDate ids of the assessments that rest on inputs that have changed since
  */
-export function groupFlows(flows: readonly TodayFlow[]): TodayGroups {
+export function groupFlows(flows: readonly TodayFlow[], outOfDate: ReadonlySet<string>): TodayGroups {
   const assessed = flows.filter((flow): flow is Assessed => flow.newest !== null);
-  const stale = assessed.filter(({ updatedAt, newest }) => updatedAt > newest.at);
-  const current = assessed.filter(({ updatedAt, newest }) => updatedAt <= newest.at);
+  const stale = assessed.filter(({ newest }) => outOfDate.has(newest.id));
+  const current = assessed.filter(({ newest }) => !outOfDate.has(newest.id));
   return {
     decisions: group(
       current.filter(({ newest }) => newest.outcome !== "clear"),
@@ -36,23 +38,6 @@ function group<Row>(rows: Row[], since: (row: Row) => string): TodayGroup<Row> {
   const sorted = rows.toSorted((a, b) => since(a).localeCompare(since(b)));
   return { rows: sorted.slice(0, SHOWN), total: rows.length };
 }
-
-const COUNTS = [
-  "no",
-  "one",
-  "two",
-  "three",
-  "four",
-  "five",
-  "six",
-  "seven",
-  "eight",
-  "nine",
-  "ten",
-  "eleven",
-  "twelve",
-];
-const count = (number: number) => COUNTS[number] ?? String(number);
 
 /** What waits, in one sentence: 'Two flows need a decision and one assessment is out of date.' */
 export function headline({ decisions, outOfDate, notAssessed }: Record<keyof TodayGroups, { total: number }>): string {

@@ -3,6 +3,8 @@ import type { Outcome } from "#app/engine/vocabulary.ts";
 /** The newest assessment of a flow in a list: what a sheet is printed from. */
 export interface AssessmentRow {
   id: string;
+  /** counts within the flow, for the revision */
+  number: number;
   documentNumber: number;
   flow: string;
   program: string;
@@ -10,6 +12,6 @@ export interface AssessmentRow {
   outcome: Outcome;
   createdAt: string;
   createdBy: string;
-  /** the flow itself has been changed since */
-  flowChanged: boolean;
+  /** the flow, or something that it uses, has changed since */
+  outOfDate: boolean;
 }

@@ -1,7 +1,7 @@
 import { z } from "zod";
 import { LIMIT_DEFINITIONS, type LimitDefinition, type LimitKey } from "#app/engine/rules/limits.ts";
 import { limitQuantity } from "#app/lib/limit-quantity.ts";
-import type { PhysicalRange } from "#app/lib/read-quantity.ts";
+import type { PhysicalRange, QuantityRule } from "#app/lib/read-quantity.ts";
 import { quantity } from "./quantity.ts";
 
 const definitions: Record<LimitKey, LimitDefinition> = LIMIT_DEFINITIONS;
@@ -30,9 +30,16 @@ function rangeOf({ unit, rule, temperaturePoint, count }: LimitDefinition): Phys
 /** A limit as the person saw it when the form was filled: what differs from it was changed by them. */
 const opened = z.object({ version: z.number().int(), value: z.number(), source: z.string() });
 
+/** The rule that a limit is read by. */
+export const limitRule = (definition: LimitDefinition): QuantityRule => ({
+  label: "limit",
+  dimension: limitQuantity(definition).dimension,
+  range: rangeOf(definition),
+});
+
 const limitFields = (definition: LimitDefinition) =>
   z.object({
-    value: quantity({ label: "limit", dimension: limitQuantity(definition).dimension, range: rangeOf(definition) }),
+    value: quantity(limitRule(definition)),
     source: z
       .string("Say where the limit comes from.")
       .trim()

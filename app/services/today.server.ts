@@ -6,6 +6,7 @@ import { mayInProgram, programsWhere } from "#app/policies/permissions.ts";
 import type { AssessmentResult, StepResult } from "#app/schemas/assessment-result.ts";
 import type { TodayAssessed, TodayFlow, TodayGroup, TodayProgram, TodayView } from "#app/schemas/today.ts";
 import { inScope, type ActorScope } from "#app/server/scope.server.ts";
+import { outOfDateAmong } from "./assessments/out-of-date.server.ts";
 import { latestScans } from "./scans.server.ts";
 
 const LATEST_SCANS = 4;
@@ -39,7 +40,15 @@ export async function todayView(scope: ActorScope): Promise<TodayView> {
       };
     const flows = await flowsOf(em, scope, works);
     const stacks = await stackCounts(em, works);
-    const { decisions, outOfDate, notAssessed } = groupFlows(flows.map(({ flow }) => flow));
+    const stale = await outOfDateAmong(
+      em,
+      scope,
+      flows.flatMap(({ flow }) => flow.newest?.id ?? []),
+    );
+    const { decisions, outOfDate, notAssessed } = groupFlows(
+      flows.map(({ flow }) => flow),
+      stale,
+    );
     const details = await detailsOf(
       em,
       [...decisions.rows, ...outOfDate.rows].map(({ newest }) => newest.id),

@@ -73,8 +73,11 @@ test.describe("an engineer", () => {
     await page.getByRole("button", { name: /^Copy step 2,/ }).click();
     await expect(page.getByRole("button", { name: /^Copy step 20,/ })).toBeVisible();
     await page.goto(path);
-    await expect(page.getByRole("status")).toContainText("Out of date");
-    await page.getByRole("status").getByRole("button", { name: "Run again" }).click();
+    await expect(page.getByRole("region", { name: /^Out of date/ })).toContainText("Out of date");
+    await page
+      .getByRole("region", { name: /^Out of date/ })
+      .getByRole("button", { name: "Run again" })
+      .click();
     await expect(page.getByText("Out of date")).toHaveCount(0);
     await expect(page.locator("#step-20")).toBeVisible();
   });

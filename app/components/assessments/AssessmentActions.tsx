@@ -13,6 +13,11 @@ export function AssessmentActions({ head, phone = false }: { head: AssessmentHea
           Change the flow
         </Link>
       ) : null}
+      {phone ? null : (
+        <Link to={`/assessments/${head.id}/compare`} className="btn">
+          Compare
+        </Link>
+      )}
       {mayAssess && !outOfDate && !phone ? <RunAgain /> : null}
       <Link to={`/sheets/${head.id}`} className={`btn ${outOfDate && mayAssess ? "" : "btn-primary"} ${grow}`}>
         Print the sheet

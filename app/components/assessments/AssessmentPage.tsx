@@ -5,16 +5,26 @@ import { chooseExaggeration } from "#app/components/drawings/choose-exaggeration
 import { StepStrip } from "#app/components/drawings/StepStrip.tsx";
 import type { AnswerFigureView, AssessmentView } from "#app/lib/assessment-view.ts";
 import { stepPath } from "#app/lib/step-path.ts";
+import type { OutOfDate } from "#app/schemas/assessment-changes.ts";
 import { AssessmentActions } from "./AssessmentActions.tsx";
 import { AssessmentTop, type NotComputable } from "./AssessmentTop.tsx";
+import { FlowCourse } from "./FlowCourse.tsx";
+import { OutOfDateSection } from "./OutOfDateSection.tsx";
 import { SidePane } from "./SidePane.tsx";
 import { StepLink } from "./StepLink.tsx";
 import { StepList } from "./StepList.tsx";
 import { StepTable } from "./StepTable.tsx";
 import { useStepSelection } from "./use-step-selection.ts";
 
+interface Props {
+  view: AssessmentView;
+  /** what has changed since it was run; null when it is up to date */
+  changed: OutOfDate | null;
+  refused: NotComputable | undefined;
+}
+
 /** An assessment: the answer, all steps on one axis, the steps one by one, and what follows from them. */
-export function AssessmentPage({ view, refused }: { view: AssessmentView; refused: NotComputable | undefined }) {
+export function AssessmentPage({ view, changed, refused }: Props) {
   const { head, diameter, outcome, where, sentences, figures, steps, selected } = view;
   const select = useStepSelection();
   const bows = steps.flatMap(({ bow }) => (bow.shape.kind === "bowed" ? [bow.shape.bow] : []));
@@ -25,6 +35,7 @@ export function AssessmentPage({ view, refused }: { view: AssessmentView; refuse
       <AssessmentTop head={head} refused={refused} />
       <article className="frame max-tablet:-mx-4 max-tablet:border-x-0">
         <AnswerLine outcome={outcome} where={where ?? undefined} sentences={sentences} figures={figures.map(linked)} />
+        {head.outOfDate ? <OutOfDateSection head={head} changed={changed} /> : null}
         <div className="border-t border-ink max-tablet:hidden">
           <StepStrip
             steps={steps.map((step) => ({
@@ -49,6 +60,7 @@ export function AssessmentPage({ view, refused }: { view: AssessmentView; refuse
           </section>
           <SidePane view={view} />
         </div>
+        <FlowCourse course={view.course} selected={selected?.number} />
       </article>
       <section className="mt-6" aria-labelledby="cautions">
         <h2 id="cautions" className="mb-2 font-semibold">
@@ -59,6 +71,11 @@ export function AssessmentPage({ view, refused }: { view: AssessmentView; refuse
       <p className="mt-4 text-label text-quiet">
         Engine {head.engineVersion}, inputs of {head.createdAt.slice(0, 16).replace("T", " ")} UTC, fingerprint{" "}
         {head.inputHash.slice(0, 12)}. ± is the expanded uncertainty, k = 2, from the tolerances given.
+      </p>
+      <p className="screen-only mt-2 tablet:hidden">
+        <Link to={`/assessments/${head.id}/compare`} className="link">
+          Compare with another assessment
+        </Link>
       </p>
       <div className="screen-only sticky bottom-0 z-10 -mx-4 mt-4 flex gap-2 border-t border-ink bg-surface px-4 py-2 tablet:hidden">
         <AssessmentActions head={head} phone />

@@ -2,7 +2,6 @@ import { Link } from "react-router";
 import { Notice } from "#app/components/ui/Notice.tsx";
 import type { AssessmentHead } from "#app/lib/assessment-view.ts";
 import { AssessmentActions } from "./AssessmentActions.tsx";
-import { RunAgain } from "./RunAgain.tsx";
 
 /** Why running again came to nothing. */
 export interface NotComputable {
@@ -37,16 +36,6 @@ export function AssessmentTop({ head, refused }: { head: AssessmentHead; refused
           <Link to={`/flows/${head.flow.id}`} className="link">
             Change the flow
           </Link>
-        </Notice>
-      ) : null}
-      {head.outOfDate ? (
-        <Notice kind="caution" title="Out of date: the flow, or something that it uses, has changed since">
-          <p>The figures below are of {head.createdAt.slice(0, 10)}, and stay as they were.</p>
-          {head.mayAssess ? (
-            <div className="screen-only mt-2">
-              <RunAgain primary />
-            </div>
-          ) : null}
         </Notice>
       ) : null}
     </>

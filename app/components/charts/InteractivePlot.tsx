@@ -24,7 +24,7 @@ import { PlotOver } from "../drawings/PlotOver.tsx";
 import { plotScale } from "../drawings/plot-scale.ts";
 import { PlotUnder } from "../drawings/PlotUnder.tsx";
 import { roomyTicks } from "../drawings/roomy-ticks.ts";
-import { axisValue } from "./axis-value.ts";
+import { axisValue, nearestStop } from "./axis-value.ts";
 import { PlotCursor } from "./PlotCursor.tsx";
 import { PlotReadOut } from "./PlotReadOut.tsx";
 
@@ -47,11 +47,11 @@ export default function InteractivePlot({ plot, label, xName }: InteractivePlotP
   const narrow = width < NARROW;
   const height = narrow ? 320 : 428;
   const frame = plotFrame(plot, width, height, TEXT, !narrow);
-  const at = read ?? plot.chosen?.x ?? axisValue(plot.x, 0.5);
+  const at = read ?? plot.chosen?.x ?? nearestStop(plot.x, axisValue(plot.x, 0.5));
   const follow = (event: PointerEvent<HTMLDivElement>) => {
     if (event.pointerType !== "mouse") return;
     const x = event.clientX - event.currentTarget.getBoundingClientRect().left;
-    setRead(axisValue(plot.x, (x - frame.left) / (frame.right - frame.left)));
+    setRead(nearestStop(plot.x, axisValue(plot.x, (x - frame.left) / (frame.right - frame.left))));
   };
   return (
     <div ref={holder}>
@@ -99,7 +99,7 @@ export default function InteractivePlot({ plot, label, xName }: InteractivePlotP
                     dot={false}
                     activeDot={false}
                     isAnimationActive={false}
-                    connectNulls
+                    connectNulls={series.gaps === undefined}
                   />
                 ),
               )}
@@ -170,10 +170,17 @@ function axisProps(axis: PlotAxis, ticks: readonly PlotTick[]) {
   };
 }
 
-/** All series in rows by x, as the library wants them; a series has no entry where it has no point. */
+/**
+ * All series in rows by x, as the library wants them; a series has no entry where it has no point. Every gap has a row, so that
+ * there is something to break the line at.
+ */
 function rowsOf(plot: Plot): Record<string, number>[] {
   const rows = new Map<number, Record<string, number>>();
   for (const series of plot.series) {
+    for (const { from, to } of series.dash === "none" ? [] : (series.gaps ?? [])) {
+      const middle = (from + to) / 2;
+      if (!rows.has(middle)) rows.set(middle, { x: middle });
+    }
     for (const point of series.points) {
       const row = rows.get(point.x) ?? { x: point.x };
       row[series.id] = point.y;

@@ -1,7 +1,7 @@
 import type { Plot, PlotFrame } from "../drawings/plot.ts";
 import { plotScale } from "../drawings/plot-scale.ts";
 import { seriesValue } from "../drawings/series-value.ts";
-import { axisValue } from "./axis-value.ts";
+import { axisValue, nearestStop } from "./axis-value.ts";
 
 export interface PlotReadOutProps {
   plot: Plot;
@@ -21,7 +21,9 @@ const THUMB = 12;
  * readers work as everywhere, and the values are its spoken text.
  */
 export function PlotReadOut({ plot, xName, at, frame, onRead }: PlotReadOutProps) {
-  const share = plotScale(plot.x, 0, STEPS)(at);
+  // One press of an arrow key goes from stop to stop where there are some.
+  const steps = plot.x.stops === undefined ? STEPS : plot.x.to - plot.x.from;
+  const share = plotScale(plot.x, 0, steps)(at);
   const values = plot.series.flatMap((series) => {
     const value = seriesValue(plot, series, at);
     return value === null ? [] : [{ series, text: plot.y.format(value) }];
@@ -34,12 +36,12 @@ export function PlotReadOut({ plot, xName, at, frame, onRead }: PlotReadOutProps
         className="plot-cursor block"
         style={{ marginLeft: frame.left - THUMB / 2, width: frame.right - frame.left + THUMB }}
         min={0}
-        max={STEPS}
+        max={steps}
         step={1}
         value={Math.round(share)}
         aria-label={`Read along ${xName.toLowerCase()}`}
         aria-valuetext={spoken}
-        onChange={(event) => onRead(axisValue(plot.x, event.currentTarget.valueAsNumber / STEPS))}
+        onChange={(event) => onRead(nearestStop(plot.x, axisValue(plot.x, event.currentTarget.valueAsNumber / steps)))}
       />
       <p className="flex flex-wrap gap-x-4 text-label" aria-hidden="true">
         <b>

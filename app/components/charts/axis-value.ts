@@ -6,3 +6,13 @@ export function axisValue(axis: PlotAxis, share: number): number {
   if (axis.scale === "log") return axis.from * (axis.to / axis.from) ** within;
   return axis.from + (axis.to - axis.from) * within;
 }
+
+/** The stop of an axis next to a value; the value itself on an axis without stops. */
+export function nearestStop({ stops = [] }: PlotAxis, value: number): number {
+  return (
+    stops.reduce<number | null>(
+      (best, stop) => (best === null || Math.abs(stop - value) < Math.abs(best - value) ? stop : best),
+      null,
+    ) ?? value
+  );
+}

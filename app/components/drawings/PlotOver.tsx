@@ -21,6 +21,9 @@ export interface PlotOverProps {
 /** Label pitch at the line ends, as a multiple of the text size: 18 px at 12.5. */
 const END_PITCH = 1.44;
 
+/** A line that ends more than this before the right edge ends early, px. */
+const EARLY = 40;
+
 /** What lies over a plot's lines: minor ticks, limits, the regime's edge, markers, the chosen value and all labels. */
 export function PlotOver(props: PlotOverProps) {
   const { plot, frame, scales, textSize, withoutEndLabels = false } = props;
@@ -209,7 +212,7 @@ function EndLabels({ plot, frame, scales, textSize }: PlotOverProps) {
   const ends = plot.series
     .flatMap((series) => {
       const last = series.points.at(-1);
-      if (last === undefined || series.labelled === "along") return [];
+      if (last === undefined || (series.labelled ?? "end") !== "end") return [];
       const y = Math.min(frame.bottom, Math.max(frame.top, scales.y(last.y)));
       return [{ series, x: Math.min(frame.right, scales.x(last.x)), y }];
     })
@@ -222,16 +225,23 @@ function EndLabels({ plot, frame, scales, textSize }: PlotOverProps) {
   );
   return ends.map(({ series, x, y }, index) => {
     const place = places[index] ?? y;
+    // A line that ends early has its label at its end: a leader to the edge would read as more of the line.
+    const from = frame.right - x > EARLY ? x + 6 : frame.right + 10;
     return (
       <g key={series.id}>
         <path
-          d={`M${coordinate(x)} ${coordinate(y)}L${frame.right + 10} ${coordinate(place)}`}
+          d={`M${coordinate(x)} ${coordinate(y)}L${coordinate(from)} ${coordinate(place)}`}
           stroke={colour(series.colourToken)}
         />
         <text
-          x={frame.right + 14}
+          x={coordinate(from + 4)}
           y={coordinate(place + textSize * 0.36)}
-          style={{ fontSize: textSize, fontWeight: 600, fill: colour(series.colourToken) }}
+          style={{
+            ...halo({ plot, frame, scales, textSize }, from),
+            fontSize: textSize,
+            fontWeight: 600,
+            fill: colour(series.colourToken),
+          }}
         >
           {series.label}
         </text>

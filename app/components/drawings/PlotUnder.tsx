@@ -1,6 +1,6 @@
 import { colour } from "./colour.ts";
 import { coordinate } from "./coordinate.ts";
-import type { Plot, PlotFrame, PlotScales } from "./plot.ts";
+import type { Plot, PlotBand, PlotFrame, PlotScales } from "./plot.ts";
 
 export interface PlotUnderProps {
   plot: Plot;
@@ -9,8 +9,10 @@ export interface PlotUnderProps {
 }
 
 const RULE_PITCH = 5;
+/** A band over a single place is a bar this wide, px. */
+const BAR = 8;
 
-/** What lies under a plot's grid: the shaded regime, and level lines over what was left out. */
+/** What lies under a plot's grid: the shaded regime, level lines over what was left out, and bands. */
 export function PlotUnder({ plot, frame, scales }: PlotUnderProps) {
   const regimeEnd = plot.regime ? Math.min(frame.right, scales.x(plot.regime.upTo)) : frame.left;
   return (
@@ -33,6 +35,27 @@ export function PlotUnder({ plot, frame, scales }: PlotUnderProps) {
         }
         return <path key={from} d={rules} stroke={colour("quiet")} strokeWidth="0.8" />;
       })}
+      {plot.bands?.flatMap(({ colourToken, runs }) =>
+        runs.map((run) => (
+          <path
+            key={`${colourToken} ${run[0]?.x}`}
+            d={bandPath(run, frame, scales)}
+            fill={colour(colourToken)}
+            fillOpacity="0.22"
+          />
+        )),
+      )}
     </>
   );
+}
+
+/** A run of a band as a closed outline, kept inside the frame. */
+function bandPath(run: PlotBand["runs"][number], frame: PlotFrame, scales: PlotScales): string {
+  const y = (value: number) => coordinate(Math.min(frame.bottom, Math.max(frame.top, scales.y(value))));
+  const [only] = run;
+  if (run.length === 1 && only)
+    return `M${coordinate(scales.x(only.x) - BAR / 2)} ${y(only.low)}h${BAR}V${y(only.high)}h${-BAR}Z`;
+  const upper = run.map(({ x, high }) => `${coordinate(scales.x(x))} ${y(high)}`);
+  const lower = run.toReversed().map(({ x, low }) => `${coordinate(scales.x(x))} ${y(low)}`);
+  return `M${[...upper, ...lower].join("L")}Z`;
 }

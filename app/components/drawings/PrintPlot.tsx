@@ -53,7 +53,7 @@ export function PrintPlot(props: PrintPlotProps) {
           series.dash === "none" ? null : (
             <path
               key={series.id}
-              d={seriesPath(series.points, scales)}
+              d={seriesPath(series, scales)}
               fill="none"
               stroke={colour(series.colourToken)}
               strokeWidth={PLOT_DASHES[series.dash].width}

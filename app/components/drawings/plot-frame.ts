@@ -8,7 +8,7 @@ import { textWidth } from "./text-width.ts";
 export function plotFrame(plot: Plot, width: number, height: number, textSize: number, endLabels: boolean): PlotFrame {
   const ticks = Math.max(...plot.y.ticks.map((tick) => textWidth(tick.text, textSize)), 0);
   const labels = plot.series
-    .filter((series) => series.labelled !== "along")
+    .filter(({ labelled = "end" }) => labelled === "end")
     .map((series) => textWidth(series.label, textSize, true) + 18);
   const right = endLabels ? Math.min(170, Math.max(60, ...labels)) : 12;
   return {

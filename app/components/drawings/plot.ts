@@ -2,7 +2,7 @@ import type { ColourToken } from "./colour.ts";
 
 /** Line of a series. Series differ by dash and marker as well as by hue, so that black on paper reads the same. */
 export type PlotDash = "solid" | "chain" | "dotted" | "long" | "reference" | "none";
-export type PlotMarker = "circle" | "square" | "triangle" | "none";
+export type PlotMarker = "circle" | "square" | "triangle" | "dash" | "none";
 
 /** Dash lengths and line width, px. */
 export const PLOT_DASHES: Readonly<Record<PlotDash, { array: string | undefined; width: number }>> = {
@@ -19,6 +19,18 @@ export interface PlotPoint {
   y: number;
 }
 
+/** A stretch of the x axis. */
+export interface PlotStretch {
+  from: number;
+  to: number;
+}
+
+/** What a series may be by its uncertainty, drawn under it; each run without a gap. */
+export interface PlotBand {
+  colourToken: ColourToken;
+  runs: readonly (readonly { x: number; low: number; high: number }[])[];
+}
+
 export interface PlotSeries {
   id: string;
   label: string;
@@ -27,10 +39,12 @@ export interface PlotSeries {
   colourToken: ColourToken;
   /** In ascending x. A curve simply ends where its quantity has no meaning any more. */
   points: readonly PlotPoint[];
+  /** Stretches between two of its points over which it has no value and no line. */
+  gaps?: readonly PlotStretch[];
   /** Where markers stand; nowhere by default. */
   markersAt?: readonly number[];
-  /** `end`: at the line's right end (default); `along`: quiet words beside the line, for a reference. */
-  labelled?: "end" | "along";
+  /** `end`: at the line's right end (default); `along`: quiet words beside the line, for a reference; `none`: beside the chart. */
+  labelled?: "end" | "along" | "none";
 }
 
 export interface PlotTick {
@@ -46,6 +60,8 @@ export interface PlotAxis {
   /** Unlabelled ticks. */
   minor?: readonly number[];
   title?: string;
+  /** The only values that there are, ascending, such as the steps of a flow; the read-out goes from one to the next. */
+  stops?: readonly number[];
   /** A value with its unit, for the read-out and the table. */
   format: (value: number) => string;
 }
@@ -70,7 +86,8 @@ export interface Plot {
   /** The value that the reader has chosen: a dot, a drop line and a mark on the axis. */
   chosen?: PlotPoint;
   /** Stretches of x that were left out, ruled with level lines. */
-  leftOut?: readonly { from: number; to: number }[];
+  leftOut?: readonly PlotStretch[];
+  bands?: readonly PlotBand[];
 }
 
 /** Bounds of the plotting area, px. */

@@ -1,4 +1,5 @@
 import type { Plot, PlotPoint } from "./plot.ts";
+import { multiples, niceStep, signedTick } from "./plot-ticks.ts";
 
 export interface ProfilePlotInput {
   /** x: position along the scan from the centre, m; y: height, m. In ascending x. */
@@ -36,7 +37,7 @@ export function profilePlot(input: ProfilePlotInput): Plot {
       to: input.radius,
       ticks: multiples(positionStep, -input.radius, input.radius).map((value) => ({
         value,
-        text: signed(value / MILLIMETRE),
+        text: signedTick(value / MILLIMETRE),
       })),
       title: "Along the scan, mm; ruled rim left out",
       format: input.formatPosition,
@@ -47,7 +48,7 @@ export function profilePlot(input: ProfilePlotInput): Plot {
       to: highest + room,
       ticks: multiples(heightStep, lowest - room, highest + room).map((value) => ({
         value,
-        text: signed(value / MICROMETRE),
+        text: signedTick(value / MICROMETRE),
       })),
       format: input.formatHeight,
     },
@@ -73,24 +74,4 @@ export function profilePlot(input: ProfilePlotInput): Plot {
           ]
         : [],
   };
-}
-
-/** 1, 2 or 5 times a power of ten, at least the given step. */
-function niceStep(least: number): number {
-  const decade = 10 ** Math.floor(Math.log10(least));
-  const digit = [1, 2, 5, 10].find((each) => each * decade >= least * 0.999) ?? 10;
-  return digit * decade;
-}
-
-function multiples(step: number, from: number, to: number): number[] {
-  const values: number[] = [];
-  for (let index = Math.ceil(from / step - 1e-9); index * step <= to + step * 1e-9; index += 1)
-    values.push(index * step);
-  return values;
-}
-
-/** A tick's number with the minus sign of the trade, not a hyphen. */
-function signed(value: number): string {
-  const text = String(Math.round(Math.abs(value) * 100) / 100);
-  return value < 0 && text !== "0" ? `−${text}` : text;
 }

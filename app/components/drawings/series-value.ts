@@ -1,3 +1,4 @@
+import { isBroken } from "./series-gaps.ts";
 import type { Plot, PlotPoint, PlotSeries } from "./plot.ts";
 
 /**
@@ -10,7 +11,7 @@ export function seriesValue(plot: Plot, series: PlotSeries, x: number): number |
   if (right === undefined) return null;
   if (right.x === x) return right.y;
   const left: PlotPoint | undefined = series.points[after - 1];
-  if (left === undefined) return null;
+  if (left === undefined || isBroken(series, left.x, right.x)) return null;
   const onX = plot.x.scale === "log" ? Math.log : identity;
   const share = (onX(x) - onX(left.x)) / (onX(right.x) - onX(left.x));
   if (plot.y.scale === "log") return left.y * (right.y / left.y) ** share;

@@ -1,3 +1,4 @@
+import { Link } from "react-router";
 import { LibraryDetail } from "#app/components/library/LibraryDetail.tsx";
 import { propertyRows } from "#app/components/library/property.ts";
 import type { LibraryRecords, LibraryUse } from "#app/schemas/library-records.ts";
@@ -10,11 +11,13 @@ interface Props {
   stamp: RecordStamp;
   mayEdit: boolean;
   uses: LibraryUse[];
+  /** whether they may ask what a change of it would do */
+  mayAsk: boolean;
 }
 
 /** A film: every property with its source, and where it is used. */
 export function FilmDetail(props: Props) {
-  const { record } = props;
+  const { record, mayAsk } = props;
   return (
     <LibraryDetail
       {...props}
@@ -28,6 +31,14 @@ export function FilmDetail(props: Props) {
           { label: "State of the stress", value: record.stressState || "not given" },
         ],
       }}
-    />
+    >
+      {mayAsk && (
+        <p className="px-4 pb-4 tablet:px-6">
+          <Link to={`/assessments/change-request?of=film:${record.id}`} className="link">
+            What would change?
+          </Link>
+        </p>
+      )}
+    </LibraryDetail>
   );
 }

@@ -11,8 +11,14 @@ export function SheetIdentity({ sheet }: { sheet: SheetView }) {
       <p>
         <strong>Draft, not released: not for the floor</strong>
         <br />
-        Handling-risk sheet <strong className="whitespace-nowrap">{sheet.number}</strong>, revision –, program{" "}
-        {sheet.program}
+        Handling-risk sheet <strong className="whitespace-nowrap">{sheet.number}</strong>, revision {sheet.revision},
+        program {sheet.program}
+        {sheet.changedSince === null ? null : (
+          <>
+            <br />
+            <strong>Inputs have changed since {sheet.changedSince}: assess again</strong>
+          </>
+        )}
       </p>
       <p className="flex flex-col gap-[0.5mm] tablet:items-end">
         <WriteIn label="Lot" width="38mm" />

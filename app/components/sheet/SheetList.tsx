@@ -8,6 +8,7 @@ import { ListHead } from "#app/components/ui/ListHead.tsx";
 import type { Option } from "#app/components/ui/SelectField.tsx";
 import { OUTCOMES } from "#app/engine/vocabulary.ts";
 import { assessmentNumber } from "#app/lib/assessment-number.ts";
+import { revisionLetters } from "#app/lib/assessment-revision.ts";
 import type { ListPage } from "#app/lib/list-params.ts";
 import type { AssessmentRow } from "#app/schemas/assessment-row.ts";
 
@@ -18,16 +19,17 @@ const columns: Column<AssessmentRow>[] = [
     wide: true,
     cell: ({ programSlug, documentNumber }) => assessmentNumber(programSlug, documentNumber),
   },
+  { key: "revision", head: "Revision", wide: true, cell: ({ number }) => revisionLetters(number) },
   {
     key: "flow",
     head: "Flow",
     sortable: true,
-    cell: ({ id, flow, flowChanged }) => (
+    cell: ({ id, flow, outOfDate }) => (
       <>
         <Link to={`/assessments/${id}`} className="link">
           {flow}
         </Link>
-        {flowChanged ? <span className="block text-label text-caution">changed since it was assessed</span> : null}
+        {outOfDate ? <span className="block text-label text-caution">out of date: inputs have changed</span> : null}
       </>
     ),
   },
@@ -65,6 +67,11 @@ export function SheetList({ page, programs }: { page: ListPage<AssessmentRow> | 
       <PageHead
         title="Sheets"
         remark={`${page.total} ${searched ? "found" : "to print"}, all drafts: none is released`}
+        actions={
+          <Link to="/assessments/change-request" className="btn">
+            What would change?
+          </Link>
+        }
       />
       <ListHead
         what="flows"

@@ -10,7 +10,7 @@ interface Props {
   action: { words: string; to: string };
   /** one for the whole page */
   exaggeration: number;
-  /** the flow has changed since, so the outcome is of then */
+  /** what it rests on has changed since, so the outcome is of then */
   stale?: boolean;
 }
 

@@ -44,7 +44,7 @@ export function TodayPage({ view }: { view: TodayView }) {
             </TodaySection>
           )}
           {outOfDate.total > 0 && (
-            <TodaySection title="Out of date" remark="the flow changed after it was assessed" more={moreOf(outOfDate)}>
+            <TodaySection title="Out of date" remark="inputs changed after it was assessed" more={moreOf(outOfDate)}>
               <ul>
                 {outOfDate.rows.map((row) => (
                   <TodayAssessedRow

@@ -1,7 +1,6 @@
 import { defineEntity, p, type InferEntity } from "@mikro-orm/core";
-import type { FlowInput } from "#app/engine/flow/model.ts";
-import type { SiteLimits } from "#app/engine/rules/limits.ts";
 import type { Outcome } from "#app/engine/vocabulary.ts";
+import type { AssessmentInput } from "#app/schemas/assessment-changes.ts";
 import type { AssessmentResult } from "#app/schemas/assessment-result.ts";
 import { Flow } from "./flow.ts";
 import { Person } from "./person.ts";
@@ -24,7 +23,7 @@ export const Assessment = defineEntity({
     engineVersion: p.text(),
     /** SHA-256 of the inputs as stored */
     inputHash: p.text(),
-    input: p.json<{ flow: FlowInput; limits: SiteLimits }>().lazy(),
+    input: p.json<AssessmentInput>().lazy(),
     result: p.json<AssessmentResult>(),
     outcome: p.text().$type<Outcome>(),
     createdAt: p.datetime(),

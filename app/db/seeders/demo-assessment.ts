@@ -6,7 +6,7 @@ import { ENGINE_VERSION } from "#app/engine/version.ts";
 import { inputHash } from "#app/services/assessments/input-hash.server.ts";
 import { resultOf } from "#app/services/assessments/result-of.ts";
 import { flowInputOf } from "#app/services/flows/flow-inputs.ts";
-import { flowDetailOf } from "#app/services/flows/read-flow.server.ts";
+import { flowContents } from "#app/services/flows/read-flow.server.ts";
 import { Assessment } from "../entities/assessment.ts";
 import { Flow } from "../entities/flow.ts";
 import type { Person } from "../entities/person.ts";
@@ -18,7 +18,9 @@ export async function addDemoAssessment(em: EntityManager, person: Person): Prom
     { program: { slug: "tern" } },
     { populate: ["program", "silicon", "updatedBy"] },
   );
-  const input = { flow: flowInputOf(await flowDetailOf(em, flow)), limits: defaultLimits() };
+  const [content] = await flowContents(em, [flow]);
+  if (!content) return;
+  const input = { flow: flowInputOf(content), limits: defaultLimits() };
   const result = resultOf(input.flow, input.limits, assessFlow(input.flow, input.limits));
   em.create(Assessment, {
     id: randomUUID(),

@@ -1,25 +1,21 @@
 import { randomUUID } from "node:crypto";
 import type { EntityManager } from "@mikro-orm/postgresql";
 import { Assessment } from "#app/db/entities/assessment.ts";
-import { EngineInputError } from "#app/engine/errors.ts";
-import { assessFlow } from "#app/engine/flow/assess.ts";
 import { ENGINE_VERSION } from "#app/engine/version.ts";
 import { mayInProgram } from "#app/policies/permissions.ts";
 import type { AssessmentResult } from "#app/schemas/assessment-result.ts";
 import type { FlowDetail } from "#app/schemas/flow-view.ts";
 import { notFound } from "#app/server/problem.server.ts";
 import { inScope, type ActorScope } from "#app/server/scope.server.ts";
-import { flowInputOf } from "../flows/flow-inputs.ts";
-import { readFlow } from "../flows/read-flow.server.ts";
-import { readLimits } from "../limits.server.ts";
 import { requireInProgram } from "../permission.server.ts";
 import { idFrom } from "../uuid.server.ts";
+import { compute, type NotComputable } from "./compute.ts";
 import { inputHash } from "./input-hash.server.ts";
-import { resultOf } from "./result-of.ts";
+import { isOutOfDate } from "./out-of-date.server.ts";
+import { presentFlow } from "./present-inputs.server.ts";
 
 /** What running an assessment came to: the stored one, or the sentence that says why nothing could be computed. */
-export type Ran =
-  { outcome: "stored"; id: string } | { outcome: "not computable"; step: number | null; reason: string };
+export type Ran = { outcome: "stored"; id: string } | NotComputable;
 
 /**
  * Assesses a flow as it is now and stores inputs, engine version and results together. What cannot be computed is stored
@@ -27,18 +23,11 @@ export type Ran =
  */
 export async function runAssessment(scope: ActorScope, flowId: string): Promise<Ran> {
   return inScope(scope, async (em): Promise<Ran> => {
-    const flow = await readFlow(em, scope, flowId);
+    const { flow, input } = await presentFlow(em, scope, flowId);
     requireInProgram(scope, "run assessments", flow.program.id, "flow");
-    if (flow.steps.length === 0)
-      return { outcome: "not computable", step: null, reason: "The flow has no steps yet. Add the first one." };
-    const input = { flow: flowInputOf(flow), limits: await readLimits(em) };
-    let result: AssessmentResult;
-    try {
-      result = resultOf(input.flow, input.limits, assessFlow(input.flow, input.limits));
-    } catch (error) {
-      if (error instanceof EngineInputError) return notComputable(error);
-      throw error;
-    }
+    const computed = compute(input);
+    if (computed.outcome === "not computable") return computed;
+    const { result } = computed;
     const created = em.create(Assessment, {
       id: randomUUID(),
       program: flow.program.id,
@@ -75,17 +64,6 @@ async function nextNumbers(em: EntityManager, { id, program }: Pick<FlowDetail, 
   return { number: (newest?.number ?? 0) + 1, documentNumber: (newest?.document ?? 0) + 1 };
 }
 
-/** `steps[3].siliconAfter` names step 4 to people. */
-function notComputable({ field, reason, allowed }: EngineInputError): Ran {
-  const index = /^steps\[(\d+)\]/.exec(field)?.[1];
-  const what = field.replace(/^steps\[\d+\]\.?/, "");
-  return {
-    outcome: "not computable",
-    step: index === undefined ? null : Number(index) + 1,
-    reason: `${what ? `${what}: ` : ""}${reason}${allowed ? ` (allowed: ${allowed})` : ""}`,
-  };
-}
-
 export interface AssessmentDetail {
   id: string;
   /** counts within the flow */
@@ -104,11 +82,12 @@ export interface AssessmentDetail {
   mayAssess: boolean;
 }
 
-async function findAssessment(em: EntityManager, scope: ActorScope, id: string | undefined) {
+/** The assessment that an id names, if the person may see it. */
+export async function findAssessment(em: EntityManager, scope: ActorScope, id: string | undefined) {
   const assessment = await em.findOne(
     Assessment,
     { id: idFrom(id, "assessment") },
-    { populate: ["program", "createdBy", "flow"] },
+    { populate: ["program", "createdBy", "flow", "input"] },
   );
   if (!assessment) throw notFound("assessment");
   requireInProgram(scope, "see the work", assessment.program.id, "assessment");
@@ -120,7 +99,7 @@ export async function getAssessment(scope: ActorScope, id: string | undefined): 
   return inScope(scope, async (em) => {
     const assessment = await findAssessment(em, scope, id);
     const { program, flow } = assessment;
-    const now = { flow: flowInputOf(await readFlow(em, scope, flow.id)), limits: await readLimits(em) };
+    const { input } = await presentFlow(em, scope, flow.id);
     return {
       id: assessment.id,
       number: assessment.number,
@@ -132,7 +111,10 @@ export async function getAssessment(scope: ActorScope, id: string | undefined): 
       createdAt: assessment.createdAt.toISOString(),
       createdBy: assessment.createdBy.name,
       result: assessment.result,
-      outOfDate: inputHash(now) !== assessment.inputHash,
+      outOfDate: isOutOfDate(
+        { engineVersion: assessment.engineVersion, inputHash: assessment.inputHash, input: assessment.input.$ },
+        input,
+      ),
       mayAssess: mayInProgram(scope.actor, "run assessments", program.id),
     };
   });

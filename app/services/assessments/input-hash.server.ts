@@ -1,8 +1,7 @@
 import { createHash } from "node:crypto";
-import type { FlowInput } from "#app/engine/flow/model.ts";
-import type { SiteLimits } from "#app/engine/rules/limits.ts";
+import type { AssessmentInput } from "#app/schemas/assessment-changes.ts";
 
 /** SHA-256 of everything that an assessment rests on: an equal hash is an equal answer of the same engine. */
-export function inputHash(input: { flow: FlowInput; limits: SiteLimits }): string {
+export function inputHash(input: AssessmentInput): string {
   return createHash("sha256").update(JSON.stringify(input)).digest("hex");
 }

@@ -7,12 +7,14 @@ import { inScope, type ActorScope } from "#app/server/scope.server.ts";
 import { escapeLike } from "../like.server.ts";
 import { requireInSomeProgram } from "../permission.server.ts";
 import { programFilter } from "../program-filter.server.ts";
+import { outOfDateAmong } from "./out-of-date.server.ts";
 
 export const ASSESSMENT_SORTS = ["run", "flow", "outcome"] as const;
 
 /** What a list shows: results are long, and it needs nothing of them. */
 const LISTED = [
   "id",
+  "number",
   "documentNumber",
   "flowName",
   "outcome",
@@ -20,7 +22,6 @@ const LISTED = [
   "program.name",
   "program.slug",
   "createdBy.name",
-  "flow.updatedAt",
 ] as const;
 
 /** A page of the newest assessment of each flow that the person may see: those that a sheet would be printed from. */
@@ -46,8 +47,14 @@ export async function listNewestAssessments(scope: ActorScope, params: ListParam
         offset: (params.page - 1) * PAGE_SIZE,
       },
     );
+    const stale = await outOfDateAmong(
+      em,
+      scope,
+      assessments.map(({ id }) => id),
+    );
     const rows = assessments.map((assessment): AssessmentRow => ({
       id: assessment.id,
+      number: assessment.number,
       documentNumber: assessment.documentNumber,
       flow: assessment.flowName,
       program: assessment.program.name,
@@ -55,7 +62,7 @@ export async function listNewestAssessments(scope: ActorScope, params: ListParam
       outcome: assessment.outcome,
       createdAt: assessment.createdAt.toISOString(),
       createdBy: assessment.createdBy.name,
-      flowChanged: assessment.flow.updatedAt > assessment.createdAt,
+      outOfDate: stale.has(assessment.id),
     }));
     return { rows, total, params };
   });

@@ -1,9 +1,8 @@
 import type { EntityManager } from "@mikro-orm/postgresql";
 import type { Outcome } from "#app/engine/vocabulary.ts";
 import type { FlowAssessmentRow, FlowDetail } from "#app/schemas/flow-view.ts";
-import { inputHash } from "../assessments/input-hash.server.ts";
-import { readLimits } from "../limits.server.ts";
-import { flowInputOf } from "./flow-inputs.ts";
+import type { ActorScope } from "#app/server/scope.server.ts";
+import { outOfDateAmong } from "../assessments/out-of-date.server.ts";
 
 interface Row {
   id: string;
@@ -11,7 +10,6 @@ interface Row {
   outcome: Outcome;
   sentences: string[];
   created_at: Date;
-  input_hash: string;
   name: string;
 }
 
@@ -21,15 +19,22 @@ const SHOWN = 20;
  * The newest assessments of a flow, newest first, held against the flow as it is now. Only their sentences are read: the results
  * are a hundred times as long.
  */
-export async function flowAssessments(em: EntityManager, flow: FlowDetail): Promise<FlowAssessmentRow[]> {
+export async function flowAssessments(
+  em: EntityManager,
+  scope: ActorScope,
+  flow: FlowDetail,
+): Promise<FlowAssessmentRow[]> {
   const rows = await em.execute<Row[]>(
-    `select a.id, a.number, a.outcome, a.result -> 'sentences' as sentences, a.created_at, a.input_hash, p.name
+    `select a.id, a.number, a.outcome, a.result -> 'sentences' as sentences, a.created_at, p.name
        from assessment a join person p on p.id = a.created_by_id
       where a.flow_id = ? order by a.number desc limit ${SHOWN}`,
     [flow.id],
   );
-  if (rows.length === 0) return [];
-  const hash = inputHash({ flow: flowInputOf(flow), limits: await readLimits(em) });
+  const stale = await outOfDateAmong(
+    em,
+    scope,
+    rows.map(({ id }) => id),
+  );
   return rows.map((row) => ({
     id: row.id,
     number: row.number,
@@ -37,6 +42,6 @@ export async function flowAssessments(em: EntityManager, flow: FlowDetail): Prom
     sentences: row.sentences,
     createdAt: new Date(row.created_at).toISOString(),
     createdBy: row.name,
-    outOfDate: row.input_hash !== hash,
+    outOfDate: stale.has(row.id),
   }));
 }

@@ -33,7 +33,7 @@ export async function flowPage(scope: ActorScope, flowId: string | undefined): P
   const id = idFrom(flowId, "flow");
   const { flow, assessments } = await inScope(scope, async (em) => {
     const found = await readFlow(em, scope, id);
-    return { flow: found, assessments: await flowAssessments(em, found) };
+    return { flow: found, assessments: await flowAssessments(em, scope, found) };
   });
   const { silicon, incomingThickness, steps } = flow;
   const thicknesses = [incomingThickness, ...steps.flatMap(({ siliconAfter }) => siliconAfter ?? [])];

@@ -1,4 +1,4 @@
-import type { EntityManager, Loaded } from "@mikro-orm/postgresql";
+import type { EntityManager } from "@mikro-orm/postgresql";
 import { FlowStepFilm } from "#app/db/entities/flow-step-film.ts";
 import { FlowStep } from "#app/db/entities/flow-step.ts";
 import { Flow } from "#app/db/entities/flow.ts";
@@ -10,10 +10,10 @@ import { requireInProgram } from "../permission.server.ts";
 import { stampOf } from "../record.server.ts";
 import { bondingMaterialInput, carrierInput, equipmentInput, filmInput } from "./flow-inputs.ts";
 
-type LoadedFlow = Loaded<Flow, "program" | "silicon" | "updatedBy">;
+type FlowContent = Omit<FlowDetail, "mayEdit" | "mayAssess">;
 
 /** The flow that an id names, if the person may see it. */
-export async function findFlow(em: EntityManager, scope: ActorScope, id: string): Promise<LoadedFlow> {
+export async function findFlow(em: EntityManager, scope: ActorScope, id: string): Promise<Flow> {
   const flow = await em.findOne(Flow, { id }, { populate: ["program", "silicon", "updatedBy"] });
   if (!flow) throw notFound("flow");
   requireInProgram(scope, "see the work", flow.program.id, "flow");
@@ -22,22 +22,26 @@ export async function findFlow(em: EntityManager, scope: ActorScope, id: string)
 
 /** A flow with its steps, in order. */
 export async function readFlow(em: EntityManager, scope: ActorScope, id: string): Promise<FlowDetail> {
-  const flow = await findFlow(em, scope, id);
-  return {
-    ...(await flowDetailOf(em, flow)),
-    mayEdit: mayInProgram(scope.actor, "edit stacks and flows", flow.program.id),
-    mayAssess: mayInProgram(scope.actor, "run assessments", flow.program.id),
-  };
+  const [flow] = await flowDetails(em, scope, [await findFlow(em, scope, id)]);
+  if (!flow) throw notFound("flow");
+  return flow;
 }
 
-/** What a flow is, whoever asks: its head, with program, silicon and last editor loaded, and its steps in order. */
-export async function flowDetailOf(
-  em: EntityManager,
-  flow: LoadedFlow,
-): Promise<Omit<FlowDetail, "mayEdit" | "mayAssess">> {
+/** Flows with their steps, in order; as many queries for many as for one. Whether the person may see them is the caller's. */
+export async function flowDetails(em: EntityManager, scope: ActorScope, flows: Flow[]): Promise<FlowDetail[]> {
+  const contents = await flowContents(em, flows);
+  return contents.map((flow) => ({
+    ...flow,
+    mayEdit: mayInProgram(scope.actor, "edit stacks and flows", flow.program.id),
+    mayAssess: mayInProgram(scope.actor, "run assessments", flow.program.id),
+  }));
+}
+
+/** What flows are, whoever asks: heads, with program, silicon and last editor loaded, and steps in order. */
+export async function flowContents(em: EntityManager, flows: Flow[]): Promise<FlowContent[]> {
   const steps = await em.find(
     FlowStep,
-    { flow: flow.id },
+    { flow: { $in: flows.map(({ id }) => id) } },
     { populate: ["equipment", "carrier", "bondingMaterial"], orderBy: { position: "asc" } },
   );
   const films = await em.find(
@@ -45,6 +49,16 @@ export async function flowDetailOf(
     { step: { $in: steps.map((step) => step.id) } },
     { populate: ["film"], orderBy: { position: "asc" } },
   );
+  return flows.map((flow) =>
+    flowContent(
+      flow,
+      steps.filter((step) => step.flow.id === flow.id),
+      films,
+    ),
+  );
+}
+
+function flowContent(flow: Flow, steps: FlowStep[], films: FlowStepFilm[]): FlowContent {
   const { program, silicon } = flow;
   return {
     id: flow.id,

@@ -2,6 +2,8 @@ import { describe, expect, it } from "vitest";
 import { createRoutesStub } from "react-router";
 import { AssessmentPage } from "#app/components/assessments/AssessmentPage.tsx";
 import { assessmentView, type AssessmentHead } from "#app/lib/assessment-view.ts";
+import { movementOf } from "#app/lib/result-comparison.ts";
+import type { OutOfDate } from "#app/schemas/assessment-changes.ts";
 import { attributes, render, words } from "#tests/components/drawings/render.ts";
 import { demoResult, HEAD } from "#tests/fixtures/demo-assessment.ts";
 
@@ -9,13 +11,16 @@ interface Shown {
   flow?: string;
   step?: string;
   head?: Partial<AssessmentHead>;
+  changed?: OutOfDate;
   refused?: { step: number | null; reason: string };
 }
 
 /** The page as the server sends it. */
-function page({ flow = "Petrel", step, head, refused }: Shown = {}): string {
+function page({ flow = "Petrel", step, head, changed, refused }: Shown = {}): string {
   const view = assessmentView({ ...HEAD, ...head }, demoResult(flow), step ?? null);
-  const Stub = createRoutesStub([{ path: "/", Component: () => <AssessmentPage view={view} refused={refused} /> }]);
+  const Stub = createRoutesStub([
+    { path: "/", Component: () => <AssessmentPage view={view} changed={changed ?? null} refused={refused} /> },
+  ]);
   return render(<Stub initialEntries={["/"]} />);
 }
 
@@ -53,7 +58,7 @@ describe("the assessment page", () => {
   });
 
   it("offers to run again and to change the flow to those only who may", () => {
-    expect(words(page())).toMatch(/Change the flow Run again Print the sheet/);
+    expect(words(page())).toMatch(/Change the flow Compare Run again Print the sheet/);
     const reader = words(page({ head: { mayAssess: false } }));
     expect(reader).not.toMatch(/Run again|Change the flow/);
     expect(reader).toContain("Print the sheet");
@@ -61,11 +66,41 @@ describe("the assessment page", () => {
 
   it("says when it is out of date, and makes running again the one filled button", () => {
     const markup = page({ head: { outOfDate: true } });
-    expect(words(markup)).toContain("Out of date: the flow, or something that it uses, has changed since");
+    expect(words(markup)).toContain("Out of date: the flow, or something that it uses, has changed since 2026-12-01");
     expect(count(markup, "btn-primary")).toBe(1);
     expect(markup).toMatch(/btn-primary[^>]*>Run again/);
     // A technician can only read that it is old.
     expect(page({ head: { outOfDate: true, mayAssess: false } })).not.toContain("Run again");
+  });
+
+  it("says what has changed, from what to what, who saved it and which steps it reaches", () => {
+    const changed: OutOfDate = {
+      engine: { from: "0.1.0", to: "0.2.0" },
+      changes: [
+        {
+          subject: "Polyimide",
+          property: "Stress at 25 °C",
+          from: "+31 MPa",
+          to: "+35 MPa",
+          steps: [3, 8],
+          record: { kind: "film", id: null },
+          by: "Ines Varga",
+          at: "2026-12-02T07:30:00.000Z",
+        },
+      ],
+      movement: movementOf(demoResult("Fulmar A"), demoResult("Fulmar B")),
+    };
+    const text = words(page({ head: { outOfDate: true }, changed }));
+    expect(text).toContain("one input has changed since 2026-12-01, and engine 0.2.0 has come in place of 0.1.0");
+    expect(text).toMatch(/Polyimide Stress at 25 °C \+31 MPa \+35 MPa 3 and 8 Ines Varga 2026-12-02 07:30 UTC/);
+    expect(text).toContain("Steps whose finding or support changes");
+    expect(text).toMatch(/13 Back-side nitride .* Do not run rule 6, bonding material/);
+  });
+
+  it("draws the warp along the flow, and says where there is none", () => {
+    const markup = page();
+    expect(markup).toContain('aria-label="Warp along the flow, as it lies on each tool"');
+    expect(words(markup)).toContain("No line where tape or frame holds the wafer flat.");
   });
 
   it("says why a flow could not be computed, at the step that stops it", () => {

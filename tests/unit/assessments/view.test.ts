@@ -87,7 +87,7 @@ describe("an assessment for its page", () => {
       checked: "not yet",
       released: "not yet",
       number: "TERN-A003",
-      revision: "–",
+      revision: "B",
       status: "Draft",
       date: "2026-12-01",
       language: "en",

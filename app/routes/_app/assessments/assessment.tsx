@@ -5,6 +5,7 @@ import { assessmentView } from "#app/lib/assessment-view.ts";
 import { scopeOf } from "#app/server/contexts.server.ts";
 import { problem } from "#app/server/problem.server.ts";
 import { getAssessment, runAgain } from "#app/services/assessments/assessments.server.ts";
+import { whatChanged } from "#app/services/assessments/what-changed.server.ts";
 import type { Route } from "./+types/assessment";
 
 export const meta: Route.MetaFunction = ({ loaderData }) => {
@@ -13,8 +14,12 @@ export const meta: Route.MetaFunction = ({ loaderData }) => {
 };
 
 export async function loader({ context, params, url }: Route.LoaderArgs) {
-  const { result, ...head } = await getAssessment(scopeOf(context), params.assessmentId);
-  return { view: assessmentView(head, result, url.searchParams.get("step")) };
+  const scope = scopeOf(context);
+  const { result, ...head } = await getAssessment(scope, params.assessmentId);
+  return {
+    view: assessmentView(head, result, url.searchParams.get("step")),
+    changed: head.outOfDate ? await whatChanged(scope, head.id) : null,
+  };
 }
 
 export async function action({ request, context, params }: Route.ActionArgs) {
@@ -28,5 +33,5 @@ export async function action({ request, context, params }: Route.ActionArgs) {
 }
 
 export default function Assessment({ loaderData, actionData }: Route.ComponentProps) {
-  return <AssessmentPage view={loaderData.view} refused={actionData} />;
+  return <AssessmentPage {...loaderData} refused={actionData} />;
 }

@@ -81,7 +81,14 @@ export default function Flows({ loaderData }: Route.ComponentProps) {
       <PageHead
         title="Flows"
         remark={`${page.total} ${searched ? "found" : page.total === 1 ? "flow" : "flows"}`}
-        actions={add}
+        actions={
+          <>
+            <Link to="/assessments/change-request" className="btn">
+              What would change?
+            </Link>
+            {add}
+          </>
+        }
       />
       <ListHead
         what="flows"

@@ -1,0 +1,12 @@
+const LETTERS = 26;
+
+/** The letters of a flow's assessments in their order: A to Z, then AA, AB. `number` counts from 1. */
+export function revisionLetters(number: number): string {
+  let [letters, rest] = ["", number];
+  while (rest > 0) {
+    const place = (rest - 1) % LETTERS;
+    letters = String.fromCharCode(65 + place) + letters;
+    rest = (rest - 1 - place) / LETTERS;
+  }
+  return letters;
+}
