@@ -7,7 +7,7 @@ import type { Film } from "../entities/film.ts";
 import type { Program } from "../entities/program.ts";
 import { measured } from "./measured.ts";
 import { delivered } from "./reference-seeder.ts";
-import type { DemoAddition } from "./demo-tern.ts";
+import type { DemoAddition } from "./demo-step.ts";
 
 interface DemoStack {
   program: string;

@@ -1,30 +1,4 @@
-import type { StepKind } from "#app/engine/flow/model.ts";
-import type { Exposure, Holding, Side } from "#app/engine/vocabulary.ts";
-
-/** A film put down in the demo: µm and MPa. */
-export interface DemoAddition {
-  side: Side;
-  film: string;
-  thickness: number;
-  stress: number;
-  coverage: number;
-}
-
-/** A step of the demo: °C, minutes, µm, mm, N/m. What is left out does not happen. */
-export interface DemoStep {
-  kind: StepKind;
-  title: string;
-  peak: number;
-  minutes?: number;
-  equipment: string;
-  exposures?: Exposure[];
-  planned: Holding;
-  silicon?: { thickness: number; tolerance: number };
-  adds?: DemoAddition[];
-  removes?: { side: Side; film: string }[];
-  trim?: { width: number; depth: number };
-  groundFaceForce?: number;
-}
+import type { DemoStep } from "./demo-step.ts";
 
 /** Program Tern: 200 mm, to 100 µm, redistribution layer and balls, on tape from the grind on. */
 export const TERN_STEPS: DemoStep[] = [
