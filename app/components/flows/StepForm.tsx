@@ -1,6 +1,6 @@
 import { getCollectionProps, getFormProps, type FieldMetadata, type SubmissionResult } from "@conform-to/react";
-import { useState, type ReactNode } from "react";
-import { Form, Link } from "react-router";
+import { useRef, useState, type ReactNode } from "react";
+import { Form, Link, useSearchParams } from "react-router";
 import { ChoiceField, sameWords } from "#app/components/forms/ChoiceField.tsx";
 import { FormHead } from "#app/components/forms/FormHead.tsx";
 import { LineField } from "#app/components/forms/LineField.tsx";
@@ -8,15 +8,20 @@ import { MeasuredField } from "#app/components/forms/MeasuredField.tsx";
 import { QuantityField } from "#app/components/forms/QuantityField.tsx";
 import { SubmitButton } from "#app/components/forms/SubmitButton.tsx";
 import { LEAVE, UnsavedGuard } from "#app/components/forms/UnsavedGuard.tsx";
+import { Notice } from "#app/components/ui/Notice.tsx";
 import { useInBrowser } from "#app/components/ui/use-in-browser.ts";
 import { useRecordForm } from "#app/components/forms/use-record-form.ts";
 import { STEP_KINDS } from "#app/engine/flow/model.ts";
 import { EXPOSURES, HOLDINGS } from "#app/engine/vocabulary.ts";
 import type { StepChoices } from "#app/lib/flow-step-choices.ts";
+import { withParams } from "#app/lib/list-params.ts";
 import { inputsOf } from "#app/lib/flow-step-kinds.ts";
 import { ExplainedChoiceField } from "./ExplainedChoiceField.tsx";
+import type { FlowConflict } from "#app/schemas/flow-plan.ts";
+import { StepConflict } from "./StepConflict.tsx";
 import { StepFilms } from "./StepFilms.tsx";
 import type { StepFormValues } from "./step-form-values.ts";
+import { useStepDraft } from "./use-step-draft.ts";
 
 interface Props {
   values: Partial<StepFormValues>;
@@ -24,24 +29,71 @@ interface Props {
   version: number;
   choices: StepChoices;
   lastResult: SubmissionResult<string[]> | null | undefined;
+  /** somebody else was quicker */
+  conflict?: FlowConflict | null;
   back: string;
   /** words of the button that saves and goes on, when there is something to go on to */
   next: string | null;
 }
 
-/** A step of a flow. What only some kinds of step have is offered for those kinds; without scripts everything is there. */
-export function StepForm({ values, version, choices, lastResult, back, next }: Props) {
+/** A step of a flow; what an earlier visit left half typed can be filled in again. */
+export function StepForm(props: Props) {
+  const [refilled, setRefilled] = useState<{ values: Partial<StepFormValues>; times: number } | null>(null);
+  return (
+    <StepFields
+      {...props}
+      key={refilled?.times}
+      values={refilled?.values ?? props.values}
+      lastResult={refilled ? null : props.lastResult}
+      refilled={refilled !== null}
+      onRefill={(values) => setRefilled({ values, times: (refilled?.times ?? 0) + 1 })}
+    />
+  );
+}
+
+interface FieldsProps extends Props {
+  refilled: boolean;
+  onRefill: (values: Partial<StepFormValues>) => void;
+}
+
+/** What only some kinds of step have is offered for those kinds; without scripts everything is there. */
+function StepFields(props: FieldsProps) {
+  const { values, version, choices, lastResult, conflict, back, next, refilled, onRefill } = props;
   const [form, fields] = useRecordForm<StepFormValues>({ lastResult, defaultValue: values });
   const [kind, setKind] = useState(fields.kind.initialValue);
   const has = inputsOf(kind);
+  const element = useRef<HTMLFormElement>(null);
+  const draft = useStepDraft(element);
+  const [search] = useSearchParams();
   return (
-    <Form method="post" {...getFormProps(form)} className="group/step frame min-w-0 space-y-4 p-4 tablet:p-6">
+    <Form
+      ref={element}
+      method="post"
+      {...getFormProps(form)}
+      className="group/step frame min-w-0 space-y-4 p-4 tablet:p-6"
+      onInput={draft.keep}
+    >
       {/* Enter in a field saves the step: the first button of a form is the one that it presses. */}
       <button type="submit" className="sr-only" tabIndex={-1} aria-hidden>
         Save step
       </button>
-      <UnsavedGuard dirty={form.dirty} />
-      <FormHead lastResult={lastResult} />
+      <UnsavedGuard dirty={form.dirty || refilled} />
+      {conflict ? (
+        <StepConflict
+          conflict={conflict}
+          theirs={withParams(search, { theirs: String(conflict.version ?? 0) })}
+          onTakeTheirs={draft.forget}
+        />
+      ) : (
+        <FormHead lastResult={lastResult} />
+      )}
+      {draft.offered && !lastResult && !refilled && (
+        <DraftOffer
+          at={draft.offered.at}
+          onTake={() => draft.offered && onRefill(draft.offered.values())}
+          onForget={draft.forget}
+        />
+      )}
       <input type="hidden" name="version" value={version} />
       <div className="grid gap-3 tablet:grid-cols-[2fr_1fr]">
         <LineField field={fields.title} label="What is done" hint="As the floor says it: coat and cure polymer, 5 µm" />
@@ -135,11 +187,26 @@ export function StepForm({ values, version, choices, lastResult, back, next }: P
             {next}
           </button>
         )}
-        <Link to={back} state={LEAVE} className="btn">
+        <Link to={back} state={LEAVE} className="btn" onClick={draft.forget}>
           Leave without saving
         </Link>
       </div>
     </Form>
+  );
+}
+
+function DraftOffer({ at, onTake, onForget }: { at: string; onTake: () => void; onForget: () => void }) {
+  return (
+    <Notice kind="caution" title={`You typed here until ${at.slice(0, 16).replace("T", " ")} UTC and did not save it`}>
+      <div className="mt-2 flex flex-wrap gap-2">
+        <button type="button" className="btn" onClick={onTake}>
+          Fill it in again
+        </button>
+        <button type="button" className="btn" onClick={onForget}>
+          Throw it away
+        </button>
+      </div>
+    </Notice>
   );
 }
 

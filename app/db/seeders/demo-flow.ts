@@ -70,7 +70,7 @@ function addStepFilms(
     side,
     film: library.film(film),
     thickness: measured(thickness * 1e-6, thickness * 0.03e-6, "measured here"),
-    stress: stress === undefined ? null : stressFor(library.film(film), stress),
+    stress: stressFor(library.film(film), stress),
     coverage,
   }));
   for (const [position, change] of [...off, ...on].entries())

@@ -52,12 +52,12 @@ export const DEMO_FLOWS: DemoFlow[] = [
     steps: TERN_STEPS,
   },
   petrel(
-    "Petrel P-1, to 50 µm on glass 3.0 ppm",
+    "Petrel P-3, to 50 µm on glass 3.0 ppm",
     "Back-side metal on a glass carrier, let go by laser through the glass.",
     "3.0",
   ),
-  petrel("Petrel P-1, on glass 3.3 ppm", "The same with the carrier that was in stock: a trial on paper.", "3.3"),
-  petrel("Petrel P-1, on glass 7.2 ppm", "The same with a carrier that is made for moulded wafers.", "7.2"),
+  petrel("Petrel P-3, on glass 3.3 ppm", "The same with the carrier that was in stock: a trial on paper.", "3.3"),
+  petrel("Petrel P-3, on glass 7.2 ppm", "The same with a carrier that is made for moulded wafers.", "7.2"),
   fulmar("Fulmar F-1 A, to 20 µm, slide adhesive", "Via reveal on a silicon carrier with the adhesive in house.", {
     material: "Thermoplastic slide adhesive A",
     peak: 180,

@@ -99,7 +99,8 @@ export async function addDemoStack(
 }
 
 /** The stress of an addition, MPa, as its own when it differs from the film's. */
-export function stressFor(film: Film, stress: number) {
+export function stressFor(film: Film, stress: number | undefined) {
+  if (stress === undefined) return null;
   const pascals = stress * 1e6;
   return film.stress.value === pascals
     ? null

@@ -53,5 +53,9 @@ export async function addFlow(scope: ActorScope, values: NewFlowValues): Promise
         ...(from.missing.bondingMaterial ? { bondingMaterial: ["Choose the bonding material."] } : {}),
       },
     };
-  return createFlow(scope, { ...head, program: from.program.id, silicon: from.siliconId }, proposeSteps(from.start));
+  return createFlow(
+    scope,
+    { ...head, program: from.program.id, silicon: from.siliconId },
+    { steps: proposeSteps(from.start), words: `Began from the stack ${from.stack.name}` },
+  );
 }

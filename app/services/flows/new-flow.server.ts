@@ -1,16 +1,28 @@
-import { FlowStep } from "#app/db/entities/flow-step.ts";
+import { randomUUID } from "node:crypto";
 import { Flow } from "#app/db/entities/flow.ts";
 import { Silicon } from "#app/db/entities/silicon.ts";
+import type { FlowPlan } from "#app/schemas/flow-plan.ts";
 import type { FlowValues, StepValues } from "#app/schemas/flow.ts";
 import { notFound } from "#app/server/problem.server.ts";
 import { inScope, type ActorScope } from "#app/server/scope.server.ts";
 import { requireInProgram } from "../permission.server.ts";
 import { newRecord, saving, type Saved } from "../record.server.ts";
+import { readPlan, writePlan } from "./plan.server.ts";
 import { findFlow } from "./read-flow.server.ts";
-import { addStep, copyStep } from "./steps.server.ts";
+import { addFirstRevision } from "./revisions.server.ts";
+
+/** The steps that a new flow begins with, and the words for that. */
+export interface FirstSteps {
+  steps: StepValues[];
+  words: string;
+}
 
 /** Adds a flow, with its first steps when there are any, in one transaction. */
-export async function createFlow(scope: ActorScope, values: FlowValues, steps: StepValues[] = []): Promise<Saved> {
+export async function createFlow(
+  scope: ActorScope,
+  values: FlowValues,
+  { steps, words }: FirstSteps = { steps: [], words: "Began empty" },
+): Promise<Saved> {
   requireInProgram(scope, "edit stacks and flows", values.program, "program");
   return saving(() =>
     inScope(scope, async (em): Promise<Saved> => {
@@ -19,7 +31,15 @@ export async function createFlow(scope: ActorScope, values: FlowValues, steps: S
       const silicon = await em.findOne(Silicon, { id: values.silicon });
       if (!silicon) throw notFound("silicon wafer");
       const flow = em.create(Flow, { ...newRecord(scope), program, name, note, silicon, incomingThickness });
-      for (const [position, step] of steps.entries()) await addStep(em, flow, position, step);
+      const plan: FlowPlan = {
+        name,
+        note,
+        silicon: silicon.id,
+        incomingThickness,
+        steps: steps.map((step) => ({ ...step, id: randomUUID() })),
+      };
+      await writePlan(em, flow, { plan: { ...plan, steps: [] }, steps: new Map(), films: new Map() }, plan);
+      addFirstRevision(em, scope, flow, plan, words);
       await em.flush();
       return { outcome: "saved", id: flow.id };
     }),
@@ -39,18 +59,16 @@ function copyName(name: string, taken: Set<string>): string {
 
 /** Copies a flow with all its steps into the same program; its assessments stay with the original. */
 export async function copyFlow(scope: ActorScope, id: string): Promise<Saved> {
-  return saving(() =>
-    inScope(scope, async (em): Promise<Saved> => {
-      const original = await findFlow(em, scope, id);
-      const { program, silicon, note, incomingThickness } = original;
-      requireInProgram(scope, "edit stacks and flows", program.id, "flow");
-      const names = await em.find(Flow, { program: program.id }, { fields: ["name"] });
-      const name = copyName(original.name, new Set(names.map((flow) => flow.name)));
-      const copy = em.create(Flow, { ...newRecord(scope), program, name, note, silicon, incomingThickness });
-      const steps = await em.find(FlowStep, { flow: original.id }, { orderBy: { position: "asc" } });
-      for (const step of steps) await copyStep(em, step, { flow: copy });
-      await em.flush();
-      return { outcome: "saved", id: copy.id };
-    }),
-  );
+  const { head, first } = await inScope(scope, async (em) => {
+    const original = await findFlow(em, scope, id);
+    const names = await em.find(Flow, { program: original.program.id }, { fields: ["name"] });
+    const { plan } = await readPlan(em, original);
+    const { steps, ...rest } = plan;
+    const name = copyName(original.name, new Set(names.map((flow) => flow.name)));
+    return {
+      head: { ...rest, program: original.program.id, name },
+      first: { steps, words: `Copied from ${original.name}` },
+    };
+  });
+  return createFlow(scope, head, first);
 }

@@ -1,14 +1,13 @@
 import type { EntityManager } from "@mikro-orm/postgresql";
-import { FlowStepFilm } from "#app/db/entities/flow-step-film.ts";
-import { FlowStep } from "#app/db/entities/flow-step.ts";
 import { Flow } from "#app/db/entities/flow.ts";
 import { mayInProgram } from "#app/policies/permissions.ts";
-import type { FlowDetail, StepDetail, StepFilmDetail } from "#app/schemas/flow-view.ts";
+import type { FlowDetail } from "#app/schemas/flow-view.ts";
 import { notFound } from "#app/server/problem.server.ts";
 import type { ActorScope } from "#app/server/scope.server.ts";
 import { requireInProgram } from "../permission.server.ts";
 import { stampOf } from "../record.server.ts";
-import { bondingMaterialInput, carrierInput, equipmentInput, filmInput } from "./flow-inputs.ts";
+import { readPlan } from "./plan.server.ts";
+import { stepDetails } from "./step-details.server.ts";
 
 /** The flow that an id names, if the person may see it. */
 export async function findFlow(em: EntityManager, scope: ActorScope, id: string): Promise<Flow> {
@@ -21,16 +20,7 @@ export async function findFlow(em: EntityManager, scope: ActorScope, id: string)
 /** A flow with its steps, in order. */
 export async function readFlow(em: EntityManager, scope: ActorScope, id: string): Promise<FlowDetail> {
   const flow = await findFlow(em, scope, id);
-  const steps = await em.find(
-    FlowStep,
-    { flow: flow.id },
-    { populate: ["equipment", "carrier", "bondingMaterial"], orderBy: { position: "asc" } },
-  );
-  const films = await em.find(
-    FlowStepFilm,
-    { step: { $in: steps.map((step) => step.id) } },
-    { populate: ["film"], orderBy: { position: "asc" } },
-  );
+  const { plan } = await readPlan(em, flow);
   const { program, silicon } = flow;
   return {
     id: flow.id,
@@ -44,43 +34,9 @@ export async function readFlow(em: EntityManager, scope: ActorScope, id: string)
       orientation: silicon.orientation,
     },
     incomingThickness: flow.incomingThickness,
-    steps: steps.map((step) =>
-      stepDetail(
-        step,
-        films.filter((film) => film.step.id === step.id),
-      ),
-    ),
+    steps: await stepDetails(em, plan.steps),
     stamp: stampOf(flow),
     mayEdit: mayInProgram(scope.actor, "edit stacks and flows", program.id),
     mayAssess: mayInProgram(scope.actor, "run assessments", program.id),
-  };
-}
-
-function stepDetail(step: FlowStep, films: FlowStepFilm[]): StepDetail {
-  return {
-    id: step.id,
-    kind: step.kind,
-    title: step.title,
-    peakTemperature: step.peakTemperature,
-    holdTime: step.holdTime ?? null,
-    equipment: step.equipment ? equipmentInput(step.equipment) : null,
-    exposures: step.exposures,
-    planned: step.planned,
-    siliconAfter: step.siliconAfter ?? null,
-    trimWidth: step.trimWidth ?? null,
-    trimDepth: step.trimDepth ?? null,
-    carrier: step.carrier ? carrierInput(step.carrier) : null,
-    bondingMaterial: step.bondingMaterial ? bondingMaterialInput(step.bondingMaterial) : null,
-    bondThickness: step.bondThickness ?? null,
-    groundFaceForce: step.groundFaceForce ?? null,
-    films: films.map((film): StepFilmDetail => ({
-      change: film.change,
-      side: film.side,
-      film: filmInput(film.film),
-      thickness: film.thickness ?? null,
-      ownStress: film.stress ?? null,
-      stress: film.stress ?? film.film.stress,
-      coverage: film.coverage,
-    })),
   };
 }

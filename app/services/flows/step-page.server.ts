@@ -1,13 +1,17 @@
+import type { EntityManager } from "@mikro-orm/postgresql";
 import type { StepChoices } from "#app/lib/flow-step-choices.ts";
 import { waferBefore, type WaferBefore } from "#app/lib/flow-wafer-before.ts";
 import type { FlowDetail, StepDetail } from "#app/schemas/flow-view.ts";
 import { notFound } from "#app/server/problem.server.ts";
-import type { ActorScope } from "#app/server/scope.server.ts";
+import { inScope, type ActorScope } from "#app/server/scope.server.ts";
 import { requireInProgram } from "../permission.server.ts";
 import { idFrom } from "../uuid.server.ts";
 import { flowInputOf } from "./flow-inputs.ts";
 import { getFlow } from "./flows.server.ts";
+import { readFlow } from "./read-flow.server.ts";
+import { removedStep } from "./revisions.server.ts";
 import { stepChoices } from "./step-choices.server.ts";
+import { stepDetails } from "./step-details.server.ts";
 import { stepNumber } from "./step-number.ts";
 
 /** What stands around a step's form. */
@@ -26,6 +30,8 @@ const surroundings = (flow: FlowDetail, index: number): StepSurroundings => ({
 
 export interface StepPage extends StepSurroundings {
   step: StepDetail;
+  /** it is no longer in the flow; saving puts it back */
+  removed: boolean;
   /** from 1 */
   number: number;
   previous: string | null;
@@ -40,20 +46,32 @@ export async function stepPage(
   scope: ActorScope,
   { flowId, stepId }: { flowId: string | undefined; stepId: string | undefined },
 ): Promise<StepPage> {
-  const flow = await getFlow(scope, flowId);
   const id = idFrom(stepId, "step");
-  const index = flow.steps.findIndex((step) => step.id === id);
-  const step = flow.steps[index];
+  const { flow, removed } = await inScope(scope, async (em) => {
+    const found = await readFlow(em, scope, idFrom(flowId, "flow"));
+    const there = found.steps.some((each) => each.id === id);
+    return { flow: found, removed: there ? null : await lostStep(em, found, id) };
+  });
+  const index = removed?.position ?? flow.steps.findIndex((each) => each.id === id);
+  const step = removed?.step ?? flow.steps[index];
   if (!step) throw notFound("step");
   return {
     ...surroundings(flow, index),
     step,
+    removed: removed !== null,
     number: index + 1,
     previous: flow.steps[index - 1]?.id ?? null,
-    next: flow.steps[index + 1]?.id ?? null,
+    next: flow.steps[removed ? index : index + 1]?.id ?? null,
     mayEdit: flow.mayEdit,
     choices: flow.mayEdit ? await stepChoices(scope) : null,
   };
+}
+
+/** A step that has been removed, as it last was, for those who may put it back. */
+async function lostStep(em: EntityManager, flow: FlowDetail, id: string) {
+  const lost = flow.mayEdit ? await removedStep(em, flow.id, id) : null;
+  const [step] = lost ? await stepDetails(em, [lost.step]) : [];
+  return lost && step ? { step, position: Math.min(lost.position, flow.steps.length) } : null;
 }
 
 export interface NewStepPage extends StepSurroundings {

@@ -5,7 +5,8 @@ import { newStepValues } from "#app/components/flows/step-form-values.ts";
 import { PageHead } from "#app/components/layout/PageHead.tsx";
 import { stepSchema } from "#app/schemas/flow.ts";
 import { scopeOf } from "#app/server/contexts.server.ts";
-import { readForm, refusal, statusOf, versionOf } from "#app/server/form.server.ts";
+import { readForm, statusOf, versionOf } from "#app/server/form.server.ts";
+import { stepRefusal } from "#app/services/flows/step-refusal.server.ts";
 import { newStepPage } from "#app/services/flows/step-page.server.ts";
 import { saveStep } from "#app/services/flows/steps.server.ts";
 import { idFrom } from "#app/services/uuid.server.ts";
@@ -22,10 +23,10 @@ export async function action({ request, context, params, url }: Route.ActionArgs
   const flowId = idFrom(params.flowId, "flow");
   const { number } = await newStepPage(scope, { flowId, at: url.searchParams.get("at") });
   const { formData, submission } = await readForm(request, stepSchema);
-  if (submission.status !== "success") return data(refusal(submission, null, "flow"), { status: statusOf(submission) });
+  if (submission.status !== "success") return data(stepRefusal(submission), { status: statusOf(submission) });
   const place = { flowId, stepId: null, position: number - 1, version: versionOf(formData) };
   const saved = await saveStep(scope, place, submission.value);
-  if (saved.outcome !== "saved") return data(refusal(submission, saved, "flow"), { status: 409 });
+  if (saved.outcome !== "saved") return data(stepRefusal(submission, saved), { status: 409 });
   throw redirect(
     formData.get("then") === "next"
       ? `/flows/${flowId}/steps/new?at=${number + 1}`
@@ -48,11 +49,12 @@ export default function NewStepRoute({ loaderData, actionData }: Route.Component
       />
       <div className="grid gap-4 wide:grid-cols-[minmax(0,1fr)_320px]">
         <StepForm
-          key={number}
+          key={`${number} ${flow.version}`}
           values={newStepValues(planned)}
           version={actionData?.version ?? flow.version}
           choices={choices}
           lastResult={actionData?.lastResult}
+          conflict={actionData?.conflict}
           back={back}
           next="Save and add another"
         />
