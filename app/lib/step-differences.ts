@@ -4,6 +4,7 @@ import type { Dimension } from "#app/engine/units/dimensions.ts";
 import { formatQuantity } from "#app/engine/units/format.ts";
 import type { StepDifference } from "#app/schemas/flow-plan.ts";
 import type { StepValues } from "#app/schemas/flow.ts";
+import { stepHandlingWords } from "./step-handling-words.ts";
 import type { ExplainedChoice, StepChoices } from "./flow-step-choices.ts";
 
 const NOTHING = "blank";
@@ -50,6 +51,7 @@ function stepWords(step: StepValues, choices: StepChoices): [label: string, word
     ["Bonding material", choiceWords(choices.materials, step.bondingMaterial)],
     ["Thickness of the bond", measuredWords(step.bondThickness, "length", "µm")],
     ["Films", filmWords(step, choices)],
+    ...stepHandlingWords(step.handling).map(([label, words]): [string, string] => [label, words ?? NOTHING]),
   ];
 }
 

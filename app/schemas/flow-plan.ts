@@ -1,3 +1,4 @@
+import type { WaferKind } from "#app/engine/flow/handling-inputs.ts";
 import type { Measured } from "#app/engine/measured.ts";
 import type { StepValues } from "./flow.ts";
 
@@ -11,6 +12,9 @@ export interface FlowPlan {
   /** id of the silicon wafer */
   silicon: string;
   incomingThickness: Measured;
+  waferKind: WaferKind;
+  gateBow: Measured | null;
+  gateWarp: Measured | null;
   steps: StepPlan[];
 }
 

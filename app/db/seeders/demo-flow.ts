@@ -1,5 +1,6 @@
 import { randomUUID } from "node:crypto";
 import type { EntityManager } from "@mikro-orm/postgresql";
+import { BLANK_HANDLING } from "#app/lib/blank-step.ts";
 import { FlowStepFilm } from "../entities/flow-step-film.ts";
 import { FlowStep } from "../entities/flow-step.ts";
 import { Flow } from "../entities/flow.ts";
@@ -19,6 +20,9 @@ export function addDemoFlow(em: EntityManager, program: Program, demo: DemoFlow,
     name: demo.name,
     note: demo.note,
     silicon: library.silicon(demo.silicon),
+    waferKind: "silicon wafer",
+    gateBow: null,
+    gateWarp: null,
     incomingThickness: measured(demo.incoming * 1e-6, 15e-6, "measured here", "incoming check"),
   });
   for (const [position, step] of demo.steps.entries()) {
@@ -42,6 +46,7 @@ export function addDemoFlow(em: EntityManager, program: Program, demo: DemoFlow,
       carrier: step.bond ? library.carrier(step.bond.carrier) : null,
       bondingMaterial: step.bond ? library.material(step.bond.material) : null,
       bondThickness: step.bond ? measured(step.bond.thickness * 1e-6, 2e-6, "supplier", "coater recipe") : null,
+      handling: { ...BLANK_HANDLING, ...step.handling },
       groundFaceForce: step.groundFaceForce === undefined ? null : faceForce(step.groundFaceForce),
     });
     addStepFilms(em, program, entity, step, library);

@@ -61,11 +61,14 @@ export const DEMO_FLOWS: DemoFlow[] = [
   fulmar("Fulmar F-1 A, to 20 µm, slide adhesive", "Via reveal on a silicon carrier with the adhesive in house.", {
     material: "Thermoplastic slide adhesive A",
     peak: 180,
+    grindVariation: 1,
     debond: { title: "Thermal slide debond, on frame", peak: 200 },
   }),
   fulmar("Fulmar F-1 B, to 20 µm, peel adhesive", "Via reveal on a silicon carrier, peeled off at room temperature.", {
     material: "Peel adhesive C with release layer",
     peak: 150,
+    variation: 1,
+    grindVariation: 0.6,
     debond: { title: "Mechanical peel debond, on frame", peak: 25 },
   }),
 ];

@@ -1,4 +1,9 @@
 import { bondTitle, type DemoBond, type DemoStep } from "./demo-step.ts";
+import { celsius, measured } from "./measured.ts";
+
+/** Thickness variation in µm; left out where the material's own share stands. */
+const variation = (micrometres: number | undefined) =>
+  micrometres === undefined ? null : measured(micrometres * 1e-6, null, "measured here");
 
 /** Program Fulmar: 300 mm, to 20 µm, vias revealed from the back side, on a silicon carrier. */
 export const fulmarSteps = (bond: DemoBond): DemoStep[] => [
@@ -20,6 +25,7 @@ export const fulmarSteps = (bond: DemoBond): DemoStep[] => [
   {
     kind: "deposit",
     title: "Sputter barrier and seed",
+    handling: { dehydrationBake: true },
     peak: 100,
     minutes: 3,
     equipment: "Sputter, electrostatic or clamp chuck",
@@ -66,6 +72,7 @@ export const fulmarSteps = (bond: DemoBond): DemoStep[] => [
   {
     kind: "reflow",
     title: "Reflow caps, bump height 24 µm",
+    handling: { bumpHeight: measured(24e-6, 1e-6, "measured here") },
     peak: 245,
     minutes: 1,
     equipment: "Reflow oven, belt or plate",
@@ -84,6 +91,7 @@ export const fulmarSteps = (bond: DemoBond): DemoStep[] => [
   {
     kind: "bond",
     title: bondTitle(bond),
+    handling: { dehydrationBake: true, bondThicknessVariation: variation(bond.variation) },
     peak: bond.peak,
     minutes: 5,
     equipment: "Wafer bonder",
@@ -94,6 +102,7 @@ export const fulmarSteps = (bond: DemoBond): DemoStep[] => [
   {
     kind: "grind",
     title: "Grind to 30 µm",
+    handling: { thicknessVariation: variation(bond.grindVariation), timeSincePrevious: 12 * 3600 },
     peak: 25,
     equipment: "Grinder and polisher",
     exposures: ["water"],
@@ -104,6 +113,7 @@ export const fulmarSteps = (bond: DemoBond): DemoStep[] => [
   {
     kind: "stress relief",
     title: "Polish to 26 µm",
+    handling: { timeSincePrevious: 3600 },
     peak: 25,
     equipment: "Chemical-mechanical polisher",
     exposures: ["base", "water"],
@@ -114,6 +124,7 @@ export const fulmarSteps = (bond: DemoBond): DemoStep[] => [
   {
     kind: "via reveal",
     title: "Reveal etch to 20 µm, vias stand 5 µm proud",
+    handling: { viaProtrusion: measured(5e-6, null, "measured here"), dehydrationBake: true },
     peak: 60,
     minutes: 5,
     equipment: "Plasma thinning or reveal etch",
@@ -125,6 +136,7 @@ export const fulmarSteps = (bond: DemoBond): DemoStep[] => [
   {
     kind: "back-side film",
     title: "Back-side nitride 0.5 µm + oxide 1.5 µm, plasma deposition",
+    handling: { dehydrationBake: true },
     peak: 190,
     minutes: 6,
     equipment: "Plasma deposition, electrostatic chuck",
@@ -148,6 +160,7 @@ export const fulmarSteps = (bond: DemoBond): DemoStep[] => [
   {
     kind: "deposit",
     title: "Sputter back-side seed",
+    handling: { dehydrationBake: true },
     peak: 90,
     minutes: 3,
     equipment: "Sputter, electrostatic or clamp chuck",
@@ -203,6 +216,13 @@ export const fulmarSteps = (bond: DemoBond): DemoStep[] => [
   {
     kind: "mount on frame",
     title: "Mount back side on film frame",
+    handling: {
+      timeSincePrevious: 4 * 3600,
+      tapeName: "Dicing tape A",
+      tapeTemperatureLimit: measured(celsius(80), null, "supplier"),
+      tapeReleasesInLight: true,
+      tapeSolvent: "unknown",
+    },
     peak: 25,
     equipment: "Frame mounter",
     planned: "carrier",
@@ -217,6 +237,7 @@ export const fulmarSteps = (bond: DemoBond): DemoStep[] => [
   {
     kind: "clean",
     title: "Remove adhesive on frame",
+    handling: { solvent: "bonding material remover", exposureTimes: { solvent: 600 }, timeSincePrevious: 3600 },
     peak: 30,
     minutes: 10,
     equipment: "Frame cleaner",

@@ -1,4 +1,5 @@
 import { bondTitle, type DemoBond, type DemoStep } from "./demo-step.ts";
+import { celsius, measured } from "./measured.ts";
 
 /** Program Petrel: 300 mm, to 50 µm with back-side metal, on a glass carrier let go by laser. */
 export const petrelSteps = (bond: DemoBond): DemoStep[] => [
@@ -30,6 +31,7 @@ export const petrelSteps = (bond: DemoBond): DemoStep[] => [
   {
     kind: "deposit",
     title: "Sputter barrier and seed, 0.3 µm",
+    handling: { dehydrationBake: true },
     peak: 100,
     minutes: 3,
     equipment: "Sputter, electrostatic or clamp chuck",
@@ -66,6 +68,7 @@ export const petrelSteps = (bond: DemoBond): DemoStep[] => [
   {
     kind: "clean",
     title: "Strip resist, etch seed",
+    handling: { topography: measured(4e-6, 0.5e-6, "measured here") },
     peak: 60,
     minutes: 10,
     equipment: "Single-wafer wet or plating",
@@ -103,6 +106,7 @@ export const petrelSteps = (bond: DemoBond): DemoStep[] => [
   {
     kind: "bond",
     title: bondTitle(bond),
+    handling: { dehydrationBake: true },
     peak: bond.peak,
     minutes: 5,
     equipment: "Wafer bonder",
@@ -113,6 +117,7 @@ export const petrelSteps = (bond: DemoBond): DemoStep[] => [
   {
     kind: "grind",
     title: "Grind to 60 µm",
+    handling: { thicknessVariation: measured(1e-6, null, "measured here"), timeSincePrevious: 12 * 3600 },
     peak: 25,
     equipment: "Grinder and polisher",
     exposures: ["water"],
@@ -123,6 +128,7 @@ export const petrelSteps = (bond: DemoBond): DemoStep[] => [
   {
     kind: "stress relief",
     title: "Polish to 50 µm",
+    handling: { thicknessVariation: measured(0.5e-6, null, "measured here"), timeSincePrevious: 3600 },
     peak: 25,
     equipment: "Grinder and polisher",
     exposures: ["water"],
@@ -142,6 +148,7 @@ export const petrelSteps = (bond: DemoBond): DemoStep[] => [
   {
     kind: "back-side film",
     title: "Back-side oxide 0.5 µm, plasma deposition",
+    handling: { dehydrationBake: true },
     peak: 180,
     minutes: 4,
     equipment: "Plasma deposition, electrostatic chuck",
@@ -152,6 +159,7 @@ export const petrelSteps = (bond: DemoBond): DemoStep[] => [
   {
     kind: "back-side film",
     title: "Sputter back-side metal 1.4 µm",
+    handling: { dehydrationBake: true },
     peak: 120,
     minutes: 6,
     equipment: "Sputter, electrostatic or clamp chuck",
@@ -177,6 +185,13 @@ export const petrelSteps = (bond: DemoBond): DemoStep[] => [
   {
     kind: "mount on frame",
     title: "Mount back side on film frame",
+    handling: {
+      timeSincePrevious: 4 * 3600,
+      tapeName: "Dicing tape A",
+      tapeTemperatureLimit: measured(celsius(80), null, "supplier"),
+      tapeReleasesInLight: true,
+      tapeSolvent: "unknown",
+    },
     peak: 25,
     equipment: "Frame mounter",
     planned: "carrier",
@@ -191,6 +206,7 @@ export const petrelSteps = (bond: DemoBond): DemoStep[] => [
   {
     kind: "clean",
     title: "Remove adhesive on frame",
+    handling: { solvent: "bonding material remover", exposureTimes: { solvent: 600 }, timeSincePrevious: 3600 },
     peak: 30,
     minutes: 10,
     equipment: "Frame cleaner",

@@ -1,6 +1,8 @@
 import type { StepKind } from "#app/engine/flow/model.ts";
 import type { Exposure, Holding, Side } from "#app/engine/vocabulary.ts";
 
+import type { StepHandlingValues } from "#app/schemas/step-handling.ts";
+
 /** A film put down in the demo: µm and MPa. */
 export interface DemoAddition {
   side: Side;
@@ -17,6 +19,9 @@ export interface DemoBond {
   material: string;
   thickness: number;
   peak: number;
+  /** of the adhesive, when better known than the material's share, and of the grind on this pair */
+  variation?: number;
+  grindVariation?: number;
   debond: { title: string; peak: number };
 }
 
@@ -35,6 +40,8 @@ export interface DemoStep {
   trim?: { width: number; depth: number };
   groundFaceForce?: number;
   bond?: DemoBond;
+  /** SI, as it is stored */
+  handling?: Partial<StepHandlingValues>;
 }
 
 /** 'Bond to Glass carrier 3.0 ppm, Laser-release adhesive B, 50 µm'. */

@@ -80,8 +80,8 @@ export async function changeFlow(
   { id, version, values }: { id: string; version: number | null; values: FlowValues },
 ): Promise<FlowSaved> {
   return changePlan(scope, { flowId: id, version }, async ({ plan }) => {
-    const { name, note, silicon, incomingThickness } = values;
-    return { plan: { ...plan, name, note, silicon, incomingThickness }, words: "Changed name and wafer", shown: id };
+    const { program: _program, ...head } = values;
+    return { plan: { ...plan, ...head }, words: "Changed name and wafer", shown: id };
   });
 }
 

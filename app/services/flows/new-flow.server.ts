@@ -26,16 +26,13 @@ export async function createFlow(
   requireInProgram(scope, "edit stacks and flows", values.program, "program");
   return saving(() =>
     inScope(scope, async (em): Promise<Saved> => {
-      const { program, name, note, incomingThickness } = values;
-      if (await em.findOne(Flow, { program, name })) return { outcome: "name taken" };
+      const { program, ...head } = values;
+      if (await em.findOne(Flow, { program, name: head.name })) return { outcome: "name taken" };
       const silicon = await em.findOne(Silicon, { id: values.silicon });
       if (!silicon) throw notFound("silicon wafer");
-      const flow = em.create(Flow, { ...newRecord(scope), program, name, note, silicon, incomingThickness });
+      const flow = em.create(Flow, { ...newRecord(scope), ...head, program, silicon });
       const plan: FlowPlan = {
-        name,
-        note,
-        silicon: silicon.id,
-        incomingThickness,
+        ...head,
         steps: steps.map((step) => ({ ...step, id: randomUUID() })),
       };
       await writePlan(em, flow, { plan: { ...plan, steps: [] }, steps: new Map(), films: new Map() }, plan);

@@ -9,6 +9,7 @@ import { FlowStepFilm } from "#app/db/entities/flow-step-film.ts";
 import { FlowStep } from "#app/db/entities/flow-step.ts";
 import type { Flow } from "#app/db/entities/flow.ts";
 import { Silicon } from "#app/db/entities/silicon.ts";
+import { completeStep } from "#app/lib/blank-step.ts";
 import type { FlowPlan, StepPlan } from "#app/schemas/flow-plan.ts";
 import type { StepValues } from "#app/schemas/flow.ts";
 import { notFound } from "#app/server/problem.server.ts";
@@ -30,13 +31,16 @@ export async function readPlan(em: EntityManager, flow: Flow): Promise<StoredPla
     { orderBy: { position: "asc" } },
   ))
     films.get(film.step.id)?.push(film);
-  const { name, note, silicon, incomingThickness } = flow;
+  const { name, note, silicon, incomingThickness, waferKind, gateBow, gateWarp } = flow;
   return {
     plan: {
       name,
       note,
       silicon: silicon.id,
       incomingThickness,
+      waferKind,
+      gateBow: gateBow ?? null,
+      gateWarp: gateWarp ?? null,
       steps: steps.map((step) => stepPlan(step, films.get(step.id) ?? [])),
     },
     steps: new Map(steps.map((step) => [step.id, step])),
@@ -61,6 +65,7 @@ function stepPlan(step: FlowStep, films: FlowStepFilm[]): StepPlan {
     bondingMaterial: step.bondingMaterial?.id ?? null,
     bondThickness: step.bondThickness ?? null,
     groundFaceForce: step.groundFaceForce ?? null,
+    handling: step.handling,
     films: films.map(({ change, side, film, thickness, stress, coverage }) => ({
       change,
       side,
@@ -84,12 +89,12 @@ const settled = (films: StepValues["films"]): StepValues["films"] =>
 export async function writePlan(em: EntityManager, flow: Flow, stored: StoredPlan, next: FlowPlan): Promise<void> {
   if (next.silicon !== flow.silicon.id)
     flow.silicon = await required(em.findOne(Silicon, { id: next.silicon }), "silicon wafer");
-  const { name, note, incomingThickness } = next;
-  em.assign(flow, { name, note, incomingThickness }, { mergeObjectProperties: false });
+  const { silicon: _silicon, steps, ...head } = next;
+  em.assign(flow, head, { mergeObjectProperties: false });
   const before = new Map(stored.plan.steps.map((step) => [step.id, step]));
-  const kept = new Set(next.steps.map(({ id }) => id));
+  const kept = new Set(steps.map(({ id }) => id));
   for (const [id, step] of stored.steps) if (!kept.has(id)) em.remove(step);
-  for (const [position, { id, ...typed }] of next.steps.entries()) {
+  for (const [position, { id, ...typed }] of steps.map(completeStep).entries()) {
     const values = { ...typed, films: settled(typed.films) };
     const known = stored.steps.get(id);
     const was = before.get(id);

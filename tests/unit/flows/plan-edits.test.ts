@@ -7,6 +7,9 @@ const plan: FlowPlan = {
   name: "Plan",
   note: "",
   silicon: "si",
+  waferKind: "silicon wafer",
+  gateBow: null,
+  gateWarp: null,
   incomingThickness: { value: 725e-6, tolerance: null, source: "supplier" },
   steps: ["a", "b", "c"].map((id) => plannedStep({ id, title: `Step ${id}` })),
 };
