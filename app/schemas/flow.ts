@@ -43,11 +43,14 @@ function checkIncoming({ incomingThickness }: { incomingThickness: Measured }, c
 export const flowSchema = z.object(flowFields).superRefine(checkIncoming);
 export type FlowValues = z.output<typeof flowSchema>;
 
-/** A new flow, which may start from the steps proposed for a stack, on a carrier where those need one. */
+/** A new flow, which may start from a template, from another flow, or from the steps proposed for a stack. */
 export const newFlowSchema = z
-  .object({ ...flowFields, stack: identifier, carrier: identifier, bondingMaterial: identifier })
+  .object({ ...flowFields, stack: identifier, template: identifier, flow: identifier, carrier: identifier, bondingMaterial: identifier })
   .superRefine(checkIncoming);
 export type NewFlowValues = z.output<typeof newFlowSchema>;
+
+/** Name and note of a flow template. */
+export const templateNameSchema = z.object(recordFields);
 
 const filmChange = z.object({
   change: z.enum(["adds", "removes"], "Choose whether the step adds or removes it."),
@@ -122,7 +125,7 @@ function checkKind(step: Partly<StepValues>, fail: Fail): void {
 function checkHandling(handling: StepHandlingValues, step: Partly<StepValues>, fail: Fail): void {
   const { exposures = [], kind } = step;
   for (const exposure of EXPOSURES)
-    if (handling.exposureTimes[exposure] !== undefined && !exposures.includes(exposure))
+    if (typeof handling.exposureTimes[exposure] === "number" && !exposures.includes(exposure))
       fail(["handling", "exposureTimes", exposureKey(exposure)], `Tick ${exposure} too, or leave its time blank.`);
   if (handling.solvent && !exposures.includes("solvent"))
     fail(["handling", "solvent"], "Tick solvent too, or leave this open.");

@@ -21,22 +21,22 @@ interface Props {
   silicon: Choice[] | { id: string; name: string };
   /** carriers and bonding materials, where the flow starts from steps that need them */
   bond?: { carriers: ExplainedChoice[]; materials: ExplainedChoice[] } | null;
-  /** a stack that the first steps come from */
-  stack?: string;
+  /** what the first steps come from */
+  origin?: { kind: "stack" | "template" | "flow"; id: string } | null;
   lastResult: SubmissionResult<string[]> | null | undefined;
   back: string;
   save: string;
 }
 
 /** The head of a flow: whose it is, its name, and the silicon as it comes in. */
-export function FlowForm({ values, version, program, silicon, bond, stack, lastResult, back, save }: Props) {
+export function FlowForm({ values, version, program, silicon, bond, origin, lastResult, back, save }: Props) {
   const [form, fields] = useRecordForm<FlowFormValues>({ lastResult, defaultValue: values });
   return (
     <Form method="post" {...getFormProps(form)} className="frame max-w-240 space-y-4 p-4 tablet:p-6">
       <UnsavedGuard dirty={form.dirty} />
       <FormHead lastResult={lastResult} />
       {version !== null && <input type="hidden" name="version" value={version} />}
-      {stack && <input type="hidden" name="stack" value={stack} />}
+      {origin && <input type="hidden" name={origin.kind} value={origin.id} />}
       <div className="grid gap-3 tablet:grid-cols-[2fr_1fr]">
         <LineField field={fields.name} label="Name" hint="Product, target thickness, how it is held" />
         {Array.isArray(program) ? (

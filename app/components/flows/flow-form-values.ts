@@ -12,7 +12,6 @@ export type FlowFormValues = {
   waferKind: string;
   gateBow: MeasuredText;
   gateWarp: MeasuredText;
-  stack: string;
   carrier: string;
   bondingMaterial: string;
 };

@@ -9,8 +9,8 @@ export const StepTemplate = defineEntity({
   tableName: "step_template",
   properties: {
     id: p.uuid().primary(),
+    /** what is done, as in the step */
     name: p.text().unique(),
-    note: p.text(),
     /** kept beside the step for the list */
     kind: p.text().$type<StepKind>(),
     step: p.json<StepValues>(),

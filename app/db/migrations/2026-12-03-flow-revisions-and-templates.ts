@@ -25,7 +25,7 @@ export class FlowRevisionsAndTemplates extends Migration {
 
     const record = `"version" int not null default 1, "created_at" timestamptz not null, "created_by_id" uuid null, "updated_at" timestamptz not null, "updated_by_id" uuid null`;
     this.addSql(
-      `create table "step_template" ("id" uuid not null, "name" text not null, "note" text not null, "kind" text not null, "step" jsonb not null, ${record}, constraint "step_template_pkey" primary key ("id"))`,
+      `create table "step_template" ("id" uuid not null, "name" text not null, "kind" text not null, "step" jsonb not null, ${record}, constraint "step_template_pkey" primary key ("id"))`,
     );
     this.addSql(
       `create table "flow_template" ("id" uuid not null, "name" text not null, "note" text not null, "diameter" double precision not null, "incoming_thickness" jsonb not null, "steps" jsonb not null, ${record}, constraint "flow_template_pkey" primary key ("id"))`,

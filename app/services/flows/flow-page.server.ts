@@ -1,6 +1,7 @@
 import type { Measured } from "#app/engine/measured.ts";
 import { planColumns } from "#app/lib/flow-plan.ts";
 import { stepRows, type StepRow } from "#app/lib/flow-rows.ts";
+import { mayOnSite } from "#app/policies/permissions.ts";
 import type { FlowHistory } from "#app/schemas/flow-plan.ts";
 import type { FlowAssessmentRow } from "#app/schemas/flow-view.ts";
 import type { RecordStamp } from "#app/schemas/record-stamp.ts";
@@ -30,6 +31,8 @@ export interface FlowPage {
   stamp: RecordStamp;
   mayEdit: boolean;
   mayAssess: boolean;
+  /** in the library of the site */
+  mayKeep: boolean;
 }
 
 /** One flow with its rows, its plan to draw and its assessments, newest first. */
@@ -62,5 +65,6 @@ export async function flowPage(scope: ActorScope, flowId: string | undefined): P
     stamp: flow.stamp,
     mayEdit: flow.mayEdit,
     mayAssess: flow.mayAssess,
+    mayKeep: steps.length > 0 && mayOnSite(scope.actor, "edit the step library"),
   };
 }

@@ -1,6 +1,9 @@
 import type { EntityManager } from "@mikro-orm/postgresql";
 import type { StepChoices } from "#app/lib/flow-step-choices.ts";
+import { readListParams } from "#app/lib/list-params.ts";
+import type { StepTemplateDetail } from "#app/schemas/template-view.ts";
 import { waferBefore, type WaferBefore } from "#app/lib/flow-wafer-before.ts";
+import { mayOnSite } from "#app/policies/permissions.ts";
 import type { FlowDetail, StepDetail } from "#app/schemas/flow-view.ts";
 import { notFound } from "#app/server/problem.server.ts";
 import { inScope, type ActorScope } from "#app/server/scope.server.ts";
@@ -10,6 +13,7 @@ import { flowInputOf } from "./flow-inputs.ts";
 import { getFlow } from "./flows.server.ts";
 import { readFlow } from "./read-flow.server.ts";
 import { removedStep } from "./revisions.server.ts";
+import { getStepTemplate, listStepTemplates } from "./step-library.server.ts";
 import { stepChoices } from "./step-choices.server.ts";
 import { stepDetails } from "./step-details.server.ts";
 import { stepNumber } from "./step-number.ts";
@@ -37,6 +41,8 @@ export interface StepPage extends StepSurroundings {
   previous: string | null;
   next: string | null;
   mayEdit: boolean;
+  /** in the library of the site */
+  mayKeep: boolean;
   /** null for those who may only read */
   choices: StepChoices | null;
 }
@@ -63,6 +69,7 @@ export async function stepPage(
     previous: flow.steps[index - 1]?.id ?? null,
     next: flow.steps[removed ? index : index + 1]?.id ?? null,
     mayEdit: flow.mayEdit,
+    mayKeep: removed === null && flow.mayEdit && mayOnSite(scope.actor, "edit the step library"),
     choices: flow.mayEdit ? await stepChoices(scope) : null,
   };
 }
@@ -80,20 +87,42 @@ export interface NewStepPage extends StepSurroundings {
   /** what holds the wafer at the step before */
   planned: StepDetail["planned"];
   choices: StepChoices;
+  library: {
+    query: string;
+    total: number;
+    offered: { id: string; name: string; kind: StepDetail["kind"] }[];
+    chosen: StepTemplateDetail | null;
+  };
 }
 
 /** A place for a new step: before the one that has number `at` now, at the end by default. */
 export async function newStepPage(
   scope: ActorScope,
-  { flowId, at }: { flowId: string | undefined; at: string | null },
+  { flowId, search }: { flowId: string | undefined; search: URLSearchParams },
 ): Promise<NewStepPage> {
   const flow = await getFlow(scope, flowId);
   requireInProgram(scope, "edit stacks and flows", flow.program.id, "flow");
-  const number = stepNumber(at, flow.steps.length);
+  const number = stepNumber(search.get("at"), flow.steps.length);
   return {
     ...surroundings(flow, number - 1),
     number,
     planned: flow.steps[number - 2]?.planned ?? "bare",
     choices: await stepChoices(scope),
+    library: await fromLibrary(scope, search),
+  };
+}
+
+const OFFERED = 8;
+
+/** Steps of the library that fit what is searched, and the one that the form is to begin with. */
+async function fromLibrary(scope: ActorScope, search: URLSearchParams): Promise<NewStepPage["library"]> {
+  const from = search.get("from");
+  const params = readListParams(search, { sorts: ["name"] });
+  const { rows, total } = await listStepTemplates(scope, { ...params, page: 1 });
+  return {
+    query: params.query,
+    total,
+    offered: rows.slice(0, OFFERED).map(({ id, name, kind }) => ({ id, name, kind })),
+    chosen: from ? await getStepTemplate(scope, from) : null,
   };
 }

@@ -51,6 +51,17 @@ export default function FlowRoute({ loaderData: flow, actionData }: Route.Compon
                   <Link to="edit" className="btn">
                     Name and wafer
                   </Link>
+                  {flow.mayKeep && (
+                    <IntentForm
+                      intent="keep flow"
+                      action="/flows/library/flows"
+                      fields={{ flow: flow.id }}
+                      busy="Keeping"
+                      className="btn"
+                    >
+                      Keep as template
+                    </IntentForm>
+                  )}
                   <IntentForm intent="copy" busy="Copying" className="btn">
                     Copy
                   </IntentForm>

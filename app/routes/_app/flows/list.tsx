@@ -80,7 +80,17 @@ export default function Flows({ loaderData }: Route.ComponentProps) {
       <PageHead
         title="Flows"
         remark={`${page.total} ${searched ? "found" : page.total === 1 ? "flow" : "flows"}`}
-        actions={add}
+        actions={
+          <>
+            <Link to="/flows/library/flows" className="btn">
+              Templates
+            </Link>
+            <Link to="/flows/library/steps" className="btn">
+              Step library
+            </Link>
+            {add}
+          </>
+        }
       />
       <ListHead
         what="flows"

@@ -1,7 +1,8 @@
 import { data, redirect } from "react-router";
 import { StepForm } from "#app/components/flows/StepForm.tsx";
+import { StepLibraryPane } from "#app/components/flows/StepLibraryPane.tsx";
 import { WaferBeforePane } from "#app/components/flows/WaferBeforePane.tsx";
-import { newStepValues } from "#app/components/flows/step-form-values.ts";
+import { newStepValues, stepFormValues } from "#app/components/flows/step-form-values.ts";
 import { PageHead } from "#app/components/layout/PageHead.tsx";
 import { stepSchema } from "#app/schemas/flow.ts";
 import { scopeOf } from "#app/server/contexts.server.ts";
@@ -15,13 +16,13 @@ import type { Route } from "./+types/new-step";
 export const meta: Route.MetaFunction = () => [{ title: "New step · Planeward" }];
 
 export async function loader({ context, params, url }: Route.LoaderArgs) {
-  return newStepPage(scopeOf(context), { flowId: params.flowId, at: url.searchParams.get("at") });
+  return newStepPage(scopeOf(context), { flowId: params.flowId, search: url.searchParams });
 }
 
 export async function action({ request, context, params, url }: Route.ActionArgs) {
   const scope = scopeOf(context);
   const flowId = idFrom(params.flowId, "flow");
-  const { number } = await newStepPage(scope, { flowId, at: url.searchParams.get("at") });
+  const { number } = await newStepPage(scope, { flowId, search: url.searchParams });
   const { formData, submission } = await readForm(request, stepSchema);
   if (submission.status !== "success") return data(stepRefusal(submission), { status: statusOf(submission) });
   const place = { flowId, stepId: null, position: number - 1, version: versionOf(formData) };
@@ -35,7 +36,7 @@ export async function action({ request, context, params, url }: Route.ActionArgs
 }
 
 export default function NewStepRoute({ loaderData, actionData }: Route.ComponentProps) {
-  const { flow, number, of, planned, before, choices } = loaderData;
+  const { flow, number, of, planned, before, choices, library } = loaderData;
   const back = `/flows/${flow.id}`;
   return (
     <>
@@ -49,8 +50,8 @@ export default function NewStepRoute({ loaderData, actionData }: Route.Component
       />
       <div className="grid gap-4 wide:grid-cols-[minmax(0,1fr)_320px]">
         <StepForm
-          key={`${number} ${flow.version}`}
-          values={newStepValues(planned)}
+          key={`${number} ${flow.version} ${library.chosen?.id ?? ""}`}
+          values={library.chosen ? stepFormValues(library.chosen.step) : newStepValues(planned)}
           version={actionData?.version ?? flow.version}
           choices={choices}
           lastResult={actionData?.lastResult}
@@ -58,7 +59,10 @@ export default function NewStepRoute({ loaderData, actionData }: Route.Component
           back={back}
           next="Save and add another"
         />
-        <WaferBeforePane wafer={before} number={number} />
+        <div className="space-y-4">
+          <StepLibraryPane library={library} number={number} />
+          <WaferBeforePane wafer={before} number={number} />
+        </div>
       </div>
     </>
   );

@@ -1,4 +1,5 @@
 import { data, Link, redirect } from "react-router";
+import { IntentForm } from "#app/components/flows/IntentForm.tsx";
 import { StepForm } from "#app/components/flows/StepForm.tsx";
 import { StepReading } from "#app/components/flows/StepReading.tsx";
 import { WaferBeforePane } from "#app/components/flows/WaferBeforePane.tsx";
@@ -39,7 +40,7 @@ export async function action({ request, context, params }: Route.ActionArgs) {
 }
 
 export default function StepRoute({ loaderData, actionData }: Route.ComponentProps) {
-  const { flow, step, removed, number, of, previous, next, before, choices } = loaderData;
+  const { flow, step, removed, number, of, previous, next, before, choices, mayKeep } = loaderData;
   const back = `/flows/${flow.id}?step=${step.id}`;
   return (
     <>
@@ -52,6 +53,17 @@ export default function StepRoute({ loaderData, actionData }: Route.ComponentPro
         remark={removed ? "removed" : `${number} of ${of}`}
         actions={
           <>
+            {mayKeep && (
+              <IntentForm
+                intent="keep step"
+                action="/flows/library/steps"
+                fields={{ flow: flow.id, step: step.id }}
+                busy="Keeping"
+                className="btn"
+              >
+                Keep in the step library
+              </IntentForm>
+            )}
             {previous && (
               <Link to={`/flows/${flow.id}/steps/${previous}`} className="btn" rel="prev">
                 Step {number - 1}
