@@ -45,7 +45,14 @@ export type FlowValues = z.output<typeof flowSchema>;
 
 /** A new flow, which may start from a template, from another flow, or from the steps proposed for a stack. */
 export const newFlowSchema = z
-  .object({ ...flowFields, stack: identifier, template: identifier, flow: identifier, carrier: identifier, bondingMaterial: identifier })
+  .object({
+    ...flowFields,
+    stack: identifier,
+    template: identifier,
+    flow: identifier,
+    carrier: identifier,
+    bondingMaterial: identifier,
+  })
   .superRefine(checkIncoming);
 export type NewFlowValues = z.output<typeof newFlowSchema>;
 

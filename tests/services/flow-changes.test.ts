@@ -55,7 +55,7 @@ test("what was done is taken back and done again, step for step, down to the fil
   expect((await stateOf(scope, flowId)).version).toBe(back.version);
   await walkHistory(scope, { flowId, version: back.version }, "redo");
   expect((await stateOf(scope, flowId)).titles).toEqual(removed.titles);
-});
+}, 30_000);
 
 test("every change keeps the whole plan, so that nothing acknowledged is lost", async () => {
   const { changeStep } = await services();

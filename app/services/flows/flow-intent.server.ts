@@ -7,6 +7,7 @@ import { idFrom } from "../uuid.server.ts";
 import { removeFlow } from "./flows.server.ts";
 import type { FlowSaved } from "./change-flow.server.ts";
 import { copyFlow } from "./new-flow.server.ts";
+import { applyWhatIf } from "./what-if.server.ts";
 import { changeStep, walkHistory, type StepMove } from "./steps.server.ts";
 
 /** Where a thing done to a flow leads, or why it was not done. */
@@ -40,6 +41,11 @@ export async function doFlowIntent(scope: ActorScope, flowId: string, formData: 
     case "redo": {
       const saved = await walkHistory(scope, { flowId, version }, intent);
       return refusalOf(saved, null) ?? { path: `/flows/${flowId}?done=${intent}` };
+    }
+    case "what-if": {
+      const saved = await applyWhatIf(scope, { flowId, version }, formData.get("changes"));
+      const refusal = refusalOf(saved, null);
+      return refusal ?? { path: `/flows/${flowId}?done=what-if` };
     }
     default:
       throw problem(400, "That is nothing that can be done to a flow.");

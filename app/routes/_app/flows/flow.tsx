@@ -6,6 +6,7 @@ import { FlowPlan } from "#app/components/flows/FlowPlan.tsx";
 import { FlowSteps, STEPS_FORM } from "#app/components/flows/FlowSteps.tsx";
 import { IntentForm } from "#app/components/flows/IntentForm.tsx";
 import { RemoveFlow } from "#app/components/flows/RemoveFlow.tsx";
+import { WhatIf } from "#app/components/flows/WhatIf.tsx";
 import { PageHead } from "#app/components/layout/PageHead.tsx";
 import { Notice } from "#app/components/ui/Notice.tsx";
 import { flowFigures } from "#app/lib/flow-figures.ts";
@@ -100,6 +101,11 @@ export default function FlowRoute({ loaderData: flow, actionData }: Route.Compon
         {flow.rows.length > 0 && (
           <div className="border-t border-ink max-tablet:hidden">
             <FlowPlan steps={flow.plan} />
+          </div>
+        )}
+        {mayAssess && flow.rows.length > 0 && (
+          <div className="screen-only border-t border-ink">
+            <WhatIf flowId={flow.id} version={stamp.version} mayEdit={mayEdit} />
           </div>
         )}
         <section className="border-t border-ink" aria-labelledby="steps-head">
