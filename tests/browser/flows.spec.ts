@@ -95,7 +95,7 @@ test.describe("an engineer", () => {
     await expect(page.getByRole("group", { name: "Thickness of the bond" })).toContainText("50 µm");
     await page.getByLabel("Tool").selectOption({ index: 1 });
     await expect(page.getByText(/Takes warp to .* edges up/)).toBeVisible();
-    await page.getByLabel("vacuum").check();
+    await page.getByLabel("vacuum", { exact: true }).check();
 
     await press(page, "Add or remove a film");
     const film = page.getByRole("group", { name: "Film, line 1" });

@@ -1,5 +1,5 @@
 import { useEffect, useRef, type RefObject } from "react";
-import { useLocation, useSearchParams } from "react-router";
+import { useLocation, useNavigation, useSearchParams } from "react-router";
 import type { FlowHistory } from "#app/schemas/flow-plan.ts";
 import { StepIcon } from "./StepIcon.tsx";
 
@@ -79,9 +79,21 @@ function HistoryButton({ direction, words, form }: HistoryButtonProps) {
   );
 }
 
-/** Control or command with Z takes back, with shift does again; in a field they are the browser's own. */
+/**
+ * Control or command with Z takes back, with shift does again; in a field they are the browser's own. Presses that come while one is on
+ * its way wait for it.
+ */
 function useUndoKeys(bar: RefObject<HTMLElement | null>): void {
+  const idle = useNavigation().state === "idle";
+  const waiting = useRef<("undo" | "redo")[]>([]);
   useEffect(() => {
+    const next = () => {
+      const direction = idle ? waiting.current.shift() : undefined;
+      const button = direction && bar.current?.querySelector<HTMLButtonElement>(`button[value=${direction}]`);
+      if (!button) return;
+      if (button.ariaDisabled === "true") waiting.current = [];
+      button.click();
+    };
     const press = (event: KeyboardEvent) => {
       if (!(event.ctrlKey || event.metaKey) || event.altKey) return;
       const key = event.key.toLowerCase();
@@ -89,9 +101,11 @@ function useUndoKeys(bar: RefObject<HTMLElement | null>): void {
       const inField = event.target instanceof HTMLElement && event.target.closest("input, textarea, select") !== null;
       if (!direction || inField) return;
       event.preventDefault();
-      bar.current?.querySelector<HTMLButtonElement>(`button[value=${direction}]`)?.click();
+      waiting.current.push(direction);
+      next();
     };
+    next();
     window.addEventListener("keydown", press);
     return () => window.removeEventListener("keydown", press);
-  }, [bar]);
+  }, [bar, idle]);
 }

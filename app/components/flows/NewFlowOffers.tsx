@@ -34,7 +34,7 @@ export function NewFlowOffers({ templates, flows }: { templates: Named[]; flows:
         <Form method="get" className="mt-3 border-t border-line pt-3">
           <SelectField
             name="flow"
-            label="a copy of a flow, in the same program"
+            label="a copy of a flow"
             options={flows.map(({ id, name }) => ({ value: id, label: name }))}
           />
           <button type="submit" className="btn mt-2">

@@ -53,8 +53,8 @@ export function useStepDrag(onDrop: (id: string, number: number) => void) {
     },
     onPointerMove: (event: PointerEvent<HTMLElement>) => {
       if (!current.current) return;
-      if (event.clientY < EDGE) window.scrollBy(0, -SCROLL);
-      else if (event.clientY > window.innerHeight - EDGE) window.scrollBy(0, SCROLL);
+      if (event.clientY < EDGE && event.movementY < 0) window.scrollBy(0, -SCROLL);
+      else if (event.clientY > window.innerHeight - EDGE && event.movementY > 0) window.scrollBy(0, SCROLL);
       show({ id, before: placeAt(event.clientY) });
     },
     onPointerUp: () => {
