@@ -11,7 +11,7 @@ import { escapeLike } from "../like.server.ts";
 import { requireInProgram, requireOnSite } from "../permission.server.ts";
 import { newRecord, stampOf } from "../record.server.ts";
 import { idFrom } from "../uuid.server.ts";
-import { freeName } from "./free-name.ts";
+import { freeName, takingName } from "./free-name.server.ts";
 import { readPlan } from "./plan.server.ts";
 import { findFlow } from "./read-flow.server.ts";
 import { stepDetails } from "./step-details.server.ts";
@@ -82,22 +82,24 @@ export async function getFlowTemplate(scope: ActorScope, id: string | undefined)
 /** Keeps a flow as a template for the whole site, under its name or the next free one. Its name and steps are then seen by all programs. */
 export async function keepFlow(scope: ActorScope, flowId: string): Promise<string> {
   requireOnSite(scope, "edit the step library");
-  return inScope(scope, async (em) => {
-    const flow = await findFlow(em, scope, flowId);
-    requireInProgram(scope, "edit stacks and flows", flow.program.id, "flow");
-    const { plan } = await readPlan(em, flow);
-    const taken = await em.find(FlowTemplate, {}, { fields: ["name"] });
-    const kept = em.create(FlowTemplate, {
-      ...newRecord(scope),
-      name: freeName(flow.name, new Set(taken.map(({ name }) => name))),
-      note: "",
-      diameter: flow.silicon.diameter,
-      incomingThickness: plan.incomingThickness,
-      steps: plan.steps.map(({ id: _id, ...step }) => step),
-    });
-    await em.flush();
-    return kept.id;
-  });
+  return takingName(() =>
+    inScope(scope, async (em) => {
+      const flow = await findFlow(em, scope, flowId);
+      requireInProgram(scope, "edit stacks and flows", flow.program.id, "flow");
+      const { plan } = await readPlan(em, flow);
+      const taken = await em.find(FlowTemplate, {}, { fields: ["name"] });
+      const kept = em.create(FlowTemplate, {
+        ...newRecord(scope),
+        name: freeName(flow.name, new Set(taken.map(({ name }) => name))),
+        note: "",
+        diameter: flow.silicon.diameter,
+        incomingThickness: plan.incomingThickness,
+        steps: plan.steps.map(({ id: _id, ...step }) => step),
+      });
+      await em.flush();
+      return kept.id;
+    }),
+  );
 }
 
 /** Renames a flow template, or changes its note. */

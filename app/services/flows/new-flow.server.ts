@@ -54,8 +54,19 @@ function copyName(name: string, taken: Set<string>): string {
   }
 }
 
+/** People who copy the same flow at the same moment, at most. */
+const ATTEMPTS = 5;
+
 /** Copies a flow with all its steps into the same program; its assessments stay with the original. */
 export async function copyFlow(scope: ActorScope, id: string): Promise<Saved> {
+  let saved = await copyOnce(scope, id);
+  // Somebody who copied it in the same moment has taken the name: the next one is free.
+  for (let attempt = 1; attempt < ATTEMPTS && saved.outcome === "name taken"; attempt++)
+    saved = await copyOnce(scope, id);
+  return saved;
+}
+
+async function copyOnce(scope: ActorScope, id: string): Promise<Saved> {
   const { head, first } = await inScope(scope, async (em) => {
     const original = await findFlow(em, scope, id);
     const names = await em.find(Flow, { program: original.program.id }, { fields: ["name"] });

@@ -11,7 +11,7 @@ import { escapeLike } from "../like.server.ts";
 import { requireOnSite } from "../permission.server.ts";
 import { newRecord, saveNamedRecord, saving, stampOf, type Saved } from "../record.server.ts";
 import { idFrom } from "../uuid.server.ts";
-import { freeName } from "./free-name.ts";
+import { freeName, takingName } from "./free-name.server.ts";
 import { readPlan } from "./plan.server.ts";
 import { findFlow } from "./read-flow.server.ts";
 import { stepDetails } from "./step-details.server.ts";
@@ -101,20 +101,22 @@ export async function removeStepTemplate(scope: ActorScope, id: string): Promise
 /** Keeps a step of a flow in the library, under its title or the next free one. */
 export async function keepStep(scope: ActorScope, flowId: string, stepId: string): Promise<string> {
   requireOnSite(scope, "edit the step library");
-  return inScope(scope, async (em) => {
-    const { plan } = await readPlan(em, await findFlow(em, scope, flowId));
-    const found = plan.steps.find(({ id }) => id === stepId);
-    if (!found) throw notFound("step");
-    const { id: _id, ...step } = found;
-    const taken = await em.find(StepTemplate, {}, { fields: ["name"] });
-    const title = freeName(step.title, new Set(taken.map(({ name }) => name)));
-    const kept = em.create(StepTemplate, {
-      ...newRecord(scope),
-      name: title,
-      kind: step.kind,
-      step: { ...step, title },
-    });
-    await em.flush();
-    return kept.id;
-  });
+  return takingName(() =>
+    inScope(scope, async (em) => {
+      const { plan } = await readPlan(em, await findFlow(em, scope, flowId));
+      const found = plan.steps.find(({ id }) => id === stepId);
+      if (!found) throw notFound("step");
+      const { id: _id, ...step } = found;
+      const taken = await em.find(StepTemplate, {}, { fields: ["name"] });
+      const title = freeName(step.title, new Set(taken.map(({ name }) => name)));
+      const kept = em.create(StepTemplate, {
+        ...newRecord(scope),
+        name: title,
+        kind: step.kind,
+        step: { ...step, title },
+      });
+      await em.flush();
+      return kept.id;
+    }),
+  );
 }
