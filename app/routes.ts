@@ -26,8 +26,15 @@ export default [
     ...prefix("flows", [
       index("routes/_app/flows/list.tsx"),
       route("new", "routes/_app/flows/new.tsx"),
+      ...prefix("library", [
+        route(":kind", "routes/_app/flows/library.tsx"),
+        route("steps/new", "routes/_app/flows/new-step-template.tsx"),
+        route("steps/:templateId", "routes/_app/flows/step-template.tsx"),
+        route("flows/:templateId", "routes/_app/flows/flow-template.tsx"),
+      ]),
       route(":flowId", "routes/_app/flows/flow.tsx"),
       route(":flowId/edit", "routes/_app/flows/edit.tsx"),
+      route(":flowId/what-if", "routes/_app/flows/what-if.ts"),
       route(":flowId/steps/new", "routes/_app/flows/new-step.tsx"),
       route(":flowId/steps/:stepId", "routes/_app/flows/step.tsx"),
     ]),

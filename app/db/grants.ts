@@ -1,8 +1,8 @@
 /**
  * What the plain role may do, table by table; run after every migration, so that a new table without a line here is a table
- * that the application cannot touch. Audit, assessments and raw files can only be added.
+ * that the application cannot touch. Audit, assessments, raw files and revisions of a flow can only be added.
  */
-const ADD_ONLY = ["assessment", "scan_file", "audit_event"];
+const ADD_ONLY = ["assessment", "scan_file", "audit_event", "flow_revision"];
 const READ_AND_WRITE = [
   "person",
   "credential",
@@ -20,6 +20,8 @@ const READ_AND_WRITE = [
   "flow",
   "flow_step",
   "flow_step_film",
+  "step_template",
+  "flow_template",
   "scan",
 ];
 

@@ -4,6 +4,7 @@ import { exceeds, reaches } from "#app/engine/rules/against-limit.ts";
 import { formatQuantity } from "#app/engine/units/format.ts";
 import type { Exposure, Holding, Side } from "#app/engine/vocabulary.ts";
 import type { StepValues } from "#app/schemas/flow.ts";
+import { BLANK_STEP } from "./blank-step.ts";
 import { filmThicknessText } from "./flow-thickness.ts";
 
 /**
@@ -85,18 +86,7 @@ type Sketch = Pick<StepValues, "kind" | "title"> & Partial<Omit<StepValues, "equ
 function stepOf({ tool, title, ...sketch }: Sketch, tools: StackStart["tools"]): StepValues {
   const called = tool.toLowerCase();
   return {
-    peakTemperature: kelvin(25),
-    holdTime: null,
-    exposures: [],
-    planned: "bare",
-    siliconAfter: null,
-    trimWidth: null,
-    trimDepth: null,
-    carrier: null,
-    bondingMaterial: null,
-    bondThickness: null,
-    groundFaceForce: null,
-    films: [],
+    ...BLANK_STEP,
     ...sketch,
     title: title.slice(0, 120),
     equipment: tools.find(({ name }) => name.toLowerCase() === called)?.id ?? null,

@@ -13,6 +13,7 @@ export const PROGRAM_PERMISSIONS = {
 export const SITE_PERMISSIONS = {
   "see the library": ["technician", "engineer", "process owner", "shift lead", "administrator"],
   "edit films": ["engineer", "process owner"],
+  "edit the step library": ["engineer", "process owner"],
   "edit carriers, bonds and limits": ["process owner", "administrator"],
   "see the audit trail": ["administrator"],
 } as const satisfies Record<string, readonly (ProgramRole | SiteRole)[]>;

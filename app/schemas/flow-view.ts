@@ -1,3 +1,4 @@
+import type { WaferKind } from "#app/engine/flow/handling-inputs.ts";
 import type {
   BondingMaterialInput,
   CarrierInput,
@@ -7,6 +8,7 @@ import type {
 } from "#app/engine/flow/model.ts";
 import type { Measured } from "#app/engine/measured.ts";
 import type { Exposure, Holding, Outcome, Side } from "#app/engine/vocabulary.ts";
+import type { StepHandlingValues } from "./step-handling.ts";
 import type { RecordStamp } from "./record-stamp.ts";
 
 /** A film that a step adds or takes off, as screens and the engine need it. */
@@ -38,6 +40,7 @@ export interface StepDetail {
   bondingMaterial: BondingMaterialInput | null;
   bondThickness: Measured | null;
   groundFaceForce: Measured | null;
+  handling: StepHandlingValues;
   films: StepFilmDetail[];
 }
 
@@ -49,6 +52,9 @@ export interface FlowDetail {
   program: { id: string; name: string; slug: string };
   silicon: { id: string; name: string; diameter: number; orientation: "100" | "111" };
   incomingThickness: Measured;
+  waferKind: WaferKind;
+  gateBow: Measured | null;
+  gateWarp: Measured | null;
   steps: StepDetail[];
   stamp: RecordStamp;
   mayEdit: boolean;

@@ -1,11 +1,14 @@
 import { z } from "zod";
+import { WAFER_KINDS } from "#app/engine/flow/handling-inputs.ts";
 import { STEP_KINDS } from "#app/engine/flow/model.ts";
 import type { Measured } from "#app/engine/measured.ts";
 import { EXPOSURES, HOLDINGS } from "#app/engine/vocabulary.ts";
-import { inputsOf } from "#app/lib/flow-step-kinds.ts";
+import { exposureKey } from "#app/lib/exposure-key.ts";
+import { inputsOf, KIND_FIELDS } from "#app/lib/flow-step-kinds.ts";
 import { measured, optionalMeasured, optionalQuantity, quantity } from "./quantity.ts";
 import { RULES } from "./ranges.ts";
 import { recordFields } from "./record-fields.ts";
+import { stepHandling, type StepHandlingValues } from "./step-handling.ts";
 
 const SPREAD = "The tolerance is as large as the thickness itself.";
 
@@ -23,6 +26,12 @@ const flowFields = {
   program: z.uuid("Choose a program."),
   silicon: z.uuid("Choose the silicon."),
   incomingThickness: measured({ ...RULES.siliconThickness, source: "supplier" }),
+  waferKind: z
+    .enum(WAFER_KINDS, "Choose what stands in the flow.")
+    .optional()
+    .transform((kind) => kind ?? "silicon wafer"),
+  gateBow: optionalMeasured({ ...RULES.bow, label: "accepted bow", source: "supplier" }),
+  gateWarp: optionalMeasured({ ...RULES.warp, label: "accepted warp", source: "supplier" }),
 };
 
 function checkIncoming({ incomingThickness }: { incomingThickness: Measured }, context: z.core.$RefinementCtx): void {
@@ -34,11 +43,21 @@ function checkIncoming({ incomingThickness }: { incomingThickness: Measured }, c
 export const flowSchema = z.object(flowFields).superRefine(checkIncoming);
 export type FlowValues = z.output<typeof flowSchema>;
 
-/** A new flow, which may start from the steps proposed for a stack, on a carrier where those need one. */
+/** A new flow, which may start from a template, from another flow, or from the steps proposed for a stack. */
 export const newFlowSchema = z
-  .object({ ...flowFields, stack: identifier, carrier: identifier, bondingMaterial: identifier })
+  .object({
+    ...flowFields,
+    stack: identifier,
+    template: identifier,
+    flow: identifier,
+    carrier: identifier,
+    bondingMaterial: identifier,
+  })
   .superRefine(checkIncoming);
 export type NewFlowValues = z.output<typeof newFlowSchema>;
+
+/** Name and note of a flow template. */
+export const templateNameSchema = z.object(recordFields);
 
 const filmChange = z.object({
   change: z.enum(["adds", "removes"], "Choose whether the step adds or removes it."),
@@ -73,6 +92,7 @@ const stepFields = z.object({
     .max(20, "A step changes at most 20 films.")
     .optional()
     .transform((list) => list ?? []),
+  handling: stepHandling.prefault({}),
 });
 export type StepValues = z.output<typeof stepFields>;
 
@@ -108,6 +128,28 @@ function checkKind(step: Partly<StepValues>, fail: Fail): void {
     fail(["siliconAfter", "value"], "Type the silicon that remains after the grind.");
 }
 
+/** What is given for handling must have something to belong to. */
+function checkHandling(handling: StepHandlingValues, step: Partly<StepValues>, fail: Fail): void {
+  const { exposures = [], kind } = step;
+  for (const exposure of EXPOSURES)
+    if (typeof handling.exposureTimes[exposure] === "number" && !exposures.includes(exposure))
+      fail(["handling", "exposureTimes", exposureKey(exposure)], `Tick ${exposure} too, or leave its time blank.`);
+  if (handling.solvent && !exposures.includes("solvent"))
+    fail(["handling", "solvent"], "Tick solvent too, or leave this open.");
+  if (handling.contactFace && !handling.contactMeans)
+    fail(["handling", "contactMeans"], "Say with what it is touched.");
+  if (handling.contactMeans && !handling.contactFace) fail(["handling", "contactFace"], "Say which face is touched.");
+  if (handling.bumpPeelForce && !handling.bumpHeight)
+    fail(["handling", "bumpHeight", "value"], "Type the height of the bumps as well.");
+  const has = inputsOf(kind);
+  for (const { field, group, who } of KIND_FIELDS) {
+    const value = handling[field];
+    if (value === null || has[group]) continue;
+    const measured = typeof value === "object";
+    fail(["handling", field, ...(measured ? ["value"] : [])], `Only ${who} has it: leave it blank.`);
+  }
+}
+
 function checkFilm({ change, thickness, stress, coverage }: Partly<StepValues["films"][number]>, fail: Fail): void {
   if (change === "adds") {
     if (thickness === null) fail(["thickness", "value"], "Type the film thickness. Blank is missing, not zero.");
@@ -129,6 +171,7 @@ function checkStep(step: Partly<StepValues>, context: z.core.$RefinementCtx): vo
     context.addIssue({ code: "custom", path, message });
   };
   checkKind(step, fail);
+  if (step.kind && typeof step.handling === "object") checkHandling(step.handling, step, fail);
   for (const field of ["siliconAfter", "trimWidth", "trimDepth", "bondThickness"] as const)
     if (reachesZero(step[field])) fail([field, "tolerance"], SPREAD.replace("thickness", "value"));
   if (!Array.isArray(step.films)) return;

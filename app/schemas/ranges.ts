@@ -69,6 +69,28 @@ export const RULES = {
   },
   share: { label: "share", dimension: "fraction", range: { least: 0, most: 1, words: "0 to 100 %" } },
   holdTime: { label: "time at peak", dimension: "time", range: { least: 0, most: 2_592_000, words: "0 to 30 days" } },
+  featureHeight: {
+    label: "height",
+    dimension: "length",
+    range: { least: 0, most: 1e-3, words: "0 to 1 mm" },
+  },
+  embeddingDepth: {
+    label: "embedding layer of the tape",
+    dimension: "length",
+    range: { least: 0, most: 2e-3, words: "0 to 2 mm" },
+  },
+  peelForce: {
+    label: "peel force",
+    dimension: "forcePerLength",
+    range: { least: 0, most: 5000, words: "0 to 5000 N/m" },
+  },
+  timeOnTape: {
+    label: "time on tape",
+    dimension: "time",
+    range: { least: 0, most: 31_536_000, words: "0 to 365 days" },
+  },
+  bow: { label: "bow", dimension: "length", range: { least: -0.02, most: 0.02, words: "−20 mm to 20 mm" } },
+  warp: { label: "warp", dimension: "length", range: { least: 0, most: 0.02, words: "0 to 20 mm" } },
   faceForce: {
     label: "ground face force",
     dimension: "forcePerLength",

@@ -37,6 +37,8 @@ const SUBJECTS: Record<string, string> = {
   Flow: "flow",
   FlowStep: "flow step",
   FlowStepFilm: "flow step film",
+  StepTemplate: "step template",
+  FlowTemplate: "flow template",
   Assessment: "assessment",
   ScanFile: "scan file",
   Scan: "scan",

@@ -74,7 +74,7 @@ for (const colorScheme of ["light", "dark"] as const)
       const stack = await stackId(page, "Petrel P-3, back-side metal");
       const path = await ownFlow(page);
       await expectNoAxeFindings(page);
-      await page.getByRole("link", { name: /^Remove step 2,/ }).click();
+      await page.getByRole("button", { name: /^Remove step 2,/ }).click();
       await expectNoAxeFindings(page);
       await assess(page);
       for (const place of [

@@ -11,11 +11,21 @@ const PROGRAM_TABLES = [
   "flow",
   "flow_step",
   "flow_step_film",
+  "flow_revision",
   "assessment",
   "scan_file",
   "scan",
 ];
-const SITE_TABLES = ["film", "silicon", "carrier", "bonding_material", "equipment", "site_limit"];
+const SITE_TABLES = [
+  "film",
+  "silicon",
+  "carrier",
+  "bonding_material",
+  "equipment",
+  "site_limit",
+  "step_template",
+  "flow_template",
+];
 
 let engineer: ActorScope;
 let technician: ActorScope;

@@ -26,6 +26,7 @@ const PROGRAM_TABLE: Record<keyof typeof PROGRAM_PERMISSIONS, string> = {
 const SITE_TABLE: Record<keyof typeof SITE_PERMISSIONS, string> = {
   "see the library": "    - y y y y y",
   "edit films": "         - - - y y -",
+  "edit the step library": "- - - y y -",
   "edit carriers, bonds and limits": "- - - - y y",
   "see the audit trail": "- - - - - y",
 };

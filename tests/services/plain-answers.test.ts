@@ -139,9 +139,9 @@ const ANSWERS: [what: string, ask: Ask][] = [
   ["a flow", ({ flowPage }, scope) => flowPage(scope, ids.flow)],
   ["a flow, whole", ({ getFlow }, scope) => getFlow(scope, ids.flow)],
   ["a flow's head", ({ headChoices }, scope) => headChoices(scope)],
-  ["a new flow", ({ newFlowPage }, scope) => newFlowPage(scope, ids.stack)],
+  ["a new flow", ({ newFlowPage }, scope) => newFlowPage(scope, new URLSearchParams({ stack: ids.stack }))],
   ["a step", ({ stepPage }, scope) => stepPage(scope, { flowId: ids.flow, stepId: ids.step })],
-  ["a new step", ({ newStepPage }, scope) => newStepPage(scope, { flowId: ids.flow, at: null })],
+  ["a new step", ({ newStepPage }, scope) => newStepPage(scope, { flowId: ids.flow, search: NOTHING_ASKED })],
   ["assessments", ({ listNewestAssessments }, scope) => listNewestAssessments(scope, LIST)],
   ["an assessment", ({ getAssessment }, scope) => getAssessment(scope, ids.assessment)],
   [

@@ -1,6 +1,6 @@
 import { getFormProps, type SubmissionResult } from "@conform-to/react";
 import { Form, Link } from "react-router";
-import { ChoiceField, type Choice } from "#app/components/forms/ChoiceField.tsx";
+import { ChoiceField, sameWords, type Choice } from "#app/components/forms/ChoiceField.tsx";
 import { FormHead } from "#app/components/forms/FormHead.tsx";
 import { LineField } from "#app/components/forms/LineField.tsx";
 import { MeasuredField } from "#app/components/forms/MeasuredField.tsx";
@@ -8,6 +8,7 @@ import { NoteField } from "#app/components/forms/NoteField.tsx";
 import { SubmitButton } from "#app/components/forms/SubmitButton.tsx";
 import { LEAVE, UnsavedGuard } from "#app/components/forms/UnsavedGuard.tsx";
 import { useRecordForm } from "#app/components/forms/use-record-form.ts";
+import { WAFER_KINDS } from "#app/engine/flow/handling-inputs.ts";
 import type { ExplainedChoice } from "#app/lib/flow-step-choices.ts";
 import { ExplainedChoiceField } from "./ExplainedChoiceField.tsx";
 import type { FlowFormValues } from "./flow-form-values.ts";
@@ -20,22 +21,22 @@ interface Props {
   silicon: Choice[] | { id: string; name: string };
   /** carriers and bonding materials, where the flow starts from steps that need them */
   bond?: { carriers: ExplainedChoice[]; materials: ExplainedChoice[] } | null;
-  /** a stack that the first steps come from */
-  stack?: string;
+  /** what the first steps come from */
+  origin?: { kind: "stack" | "template" | "flow"; id: string } | null;
   lastResult: SubmissionResult<string[]> | null | undefined;
   back: string;
   save: string;
 }
 
 /** The head of a flow: whose it is, its name, and the silicon as it comes in. */
-export function FlowForm({ values, version, program, silicon, bond, stack, lastResult, back, save }: Props) {
+export function FlowForm({ values, version, program, silicon, bond, origin, lastResult, back, save }: Props) {
   const [form, fields] = useRecordForm<FlowFormValues>({ lastResult, defaultValue: values });
   return (
     <Form method="post" {...getFormProps(form)} className="frame max-w-240 space-y-4 p-4 tablet:p-6">
       <UnsavedGuard dirty={form.dirty} />
       <FormHead lastResult={lastResult} />
       {version !== null && <input type="hidden" name="version" value={version} />}
-      {stack && <input type="hidden" name="stack" value={stack} />}
+      {origin && <input type="hidden" name={origin.kind} value={origin.id} />}
       <div className="grid gap-3 tablet:grid-cols-[2fr_1fr]">
         <LineField field={fields.name} label="Name" hint="Product, target thickness, how it is held" />
         {Array.isArray(program) ? (
@@ -56,6 +57,29 @@ export function FlowForm({ values, version, program, silicon, bond, stack, lastR
         example="725 um"
         hint="Before the first step"
       />
+      <details className="border-t border-line pt-3" open={Boolean(values.gateBow?.value || values.gateWarp?.value)}>
+        <summary className="cursor-pointer font-semibold">What may come in</summary>
+        <div className="mt-3 space-y-3">
+          <ChoiceField
+            field={fields.waferKind}
+            label="What stands in the flow"
+            choices={sameWords(WAFER_KINDS)}
+            hint="Only silicon wafers are judged; everything else is refused by name"
+          />
+          <MeasuredField
+            field={fields.gateBow}
+            label="Bow that is accepted, dome positive, with its band as tolerance"
+            dimension="length"
+            example="-90 um"
+          />
+          <MeasuredField
+            field={fields.gateWarp}
+            label="Largest warp that is accepted"
+            dimension="length"
+            example="200 um"
+          />
+        </div>
+      </details>
       {bond && (
         <fieldset className="border-t border-line pt-3">
           <legend className="float-left mb-2 w-full font-semibold">Carrier and bond</legend>

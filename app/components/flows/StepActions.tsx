@@ -1,6 +1,5 @@
 import { Link, useSearchParams } from "react-router";
 import type { StepRow } from "#app/lib/flow-rows.ts";
-import { withParams } from "#app/lib/list-params.ts";
 import { StepIcon } from "./StepIcon.tsx";
 
 interface Props {
@@ -18,7 +17,7 @@ const BUTTON =
 export function StepActions({ row, of, form }: Props) {
   const [search] = useSearchParams();
   const name = `step ${row.number}, ${row.title}`;
-  const moved = search.get("step") === row.id ? search.get("moved") : null;
+  const moved = search.get("step") === row.id ? search.get("done") : null;
   const move = (kind: "up" | "down", possible: boolean) => (
     <button
       type="submit"
@@ -27,7 +26,7 @@ export function StepActions({ row, of, form }: Props) {
       value={`${kind} ${row.id}`}
       className={BUTTON}
       aria-label={`Move ${kind} ${name}`}
-      title={`Move ${kind}`}
+      title={`Move ${kind} (Alt and arrow key)`}
       aria-disabled={possible ? undefined : true}
       // A row that has been moved keeps the focus on the button that moved it.
       autoFocus={moved === kind}
@@ -59,15 +58,17 @@ export function StepActions({ row, of, form }: Props) {
       >
         <StepIcon kind="insert" />
       </Link>
-      <Link
-        to={withParams(search, { remove: row.id, step: null, moved: null })}
-        preventScrollReset
+      <button
+        type="submit"
+        form={form}
+        name="change"
+        value={`remove ${row.id}`}
         className={`${BUTTON} hover:text-stop`}
         aria-label={`Remove ${name}`}
         title="Remove"
       >
         <StepIcon kind="remove" />
-      </Link>
+      </button>
     </div>
   );
 }

@@ -1,6 +1,7 @@
 import { PropertyTable, type Property } from "#app/components/ui/PropertyTable.tsx";
 import type { Measured } from "#app/engine/measured.ts";
 import { formatQuantity } from "#app/engine/units/format.ts";
+import { stepHandlingWords } from "#app/lib/step-handling-words.ts";
 import type { StepDetail } from "#app/schemas/flow-view.ts";
 
 /** A step for those who may not change it: everything of its form, to read. */
@@ -15,6 +16,7 @@ export function StepReading({ step }: { step: StepDetail }) {
     ["Carrier", step.carrier?.name ?? null],
     ["Bonding material", step.bondingMaterial?.name ?? null],
     ...step.films.map(filmWords),
+    ...stepHandlingWords(step.handling),
   ];
   const properties = measuredOf(step);
   return (

@@ -1,4 +1,4 @@
-import { Fragment, type ReactNode } from "react";
+import { Fragment, type HTMLAttributes, type ReactNode } from "react";
 import { Link } from "react-router";
 import { noBreak } from "#app/components/drawings/no-break.ts";
 import type { StepRow } from "#app/lib/flow-rows.ts";
@@ -15,12 +15,14 @@ export interface StepTableProps {
   actions?: (row: StepRow) => ReactNode;
   /** on a phone: where it leads to open a row to its actions, or to close it again */
   more?: (row: StepRow) => string;
+  /** rows are moved by a handle: its events, the step that is being moved, and the index of the row that it would go before */
+  drag?: { handle: (id: string) => HTMLAttributes<HTMLElement>; id: string | null; before: number | null };
   /** what is said or asked beneath a row */
   below?: (row: StepRow) => ReactNode;
 }
 
 /** The steps of a flow, one a row; on a phone a row becomes a block. */
-export function StepTable({ caption, rows, href, current, actions, more, below }: StepTableProps) {
+export function StepTable({ caption, rows, href, current, actions, more, drag, below }: StepTableProps) {
   const columns = actions ? 9 : 8;
   return (
     <div className="overflow-x-auto" tabIndex={0} role="region" aria-label={caption}>
@@ -58,11 +60,19 @@ export function StepTable({ caption, rows, href, current, actions, more, below }
           </tr>
         </thead>
         <tbody>
-          {rows.map((row) => {
+          {rows.map((row, index) => {
             const beneath = below?.(row);
             return (
               <Fragment key={row.id}>
-                <Row row={row} href={href} current={row.id === current} actions={actions} more={more?.(row)} />
+                <Row
+                  row={row}
+                  href={href}
+                  current={row.id === current}
+                  actions={actions}
+                  more={more?.(row)}
+                  handle={drag?.handle(row.id)}
+                  look={drag ? lookOf(drag, row, index, rows.length) : ""}
+                />
                 {actions && row.id === current && (
                   <tr className="tablet:hidden">
                     <td colSpan={columns} className="border-t-0 bg-wash pl-10">
@@ -86,19 +96,47 @@ export function StepTable({ caption, rows, href, current, actions, more, below }
   );
 }
 
-function Row({
-  row,
-  href,
-  current,
-  actions,
-  more,
-}: Pick<StepTableProps, "href" | "actions"> & { row: StepRow; current: boolean; more: string | undefined }) {
+/** A row while one is being moved: the one that moves is pale, a line shows where it would go. */
+function lookOf(
+  { id, before }: NonNullable<StepTableProps["drag"]>,
+  row: StepRow,
+  index: number,
+  rows: number,
+): string {
+  if (row.id === id) return "opacity-50";
+  if (before === index) return "[&>*]:border-t-3 [&>*]:border-t-copper!";
+  if (before === rows && index === rows - 1) return "[&>*]:border-b-3 [&>*]:border-b-copper!";
+  return "";
+}
+
+interface RowProps extends Pick<StepTableProps, "href" | "actions"> {
+  row: StepRow;
+  current: boolean;
+  more: string | undefined;
+  handle: HTMLAttributes<HTMLElement> | undefined;
+  look: string;
+}
+
+function Row({ row, href, current, actions, more, handle, look }: RowProps) {
   const { number, title, kind, changes, peak, minutes, silicon, tool, exposures, planned, bond } = row;
   const assumedWords = row.assumed && <span className="font-semibold text-caution"> assumed numbers</span>;
   const toolWords = tool ?? <span className="font-semibold text-caution">No tool chosen</span>;
   return (
-    <tr id={`step-${row.id}`} aria-current={current ? "true" : undefined}>
-      <td className="num w-10 align-top font-semibold tablet:w-15">{number}</td>
+    <tr id={`step-${row.id}`} aria-current={current ? "true" : undefined} className={look}>
+      <td className="num w-10 align-top font-semibold whitespace-nowrap tablet:w-15">
+        {handle && (
+          // For the pointer only: the buttons of the row do the same for everybody.
+          <span
+            {...handle}
+            className="-my-1.5 mr-1 -ml-2 inline-flex h-8 w-6 cursor-grab touch-none items-center justify-center align-middle text-quiet select-none active:cursor-grabbing max-tablet:hidden"
+            title="Drag to move"
+            aria-hidden
+          >
+            <StepIcon kind="drag" />
+          </span>
+        )}
+        {number}
+      </td>
       <th scope="row" className="align-top font-normal max-tablet:relative max-tablet:pr-12 wide:min-w-72">
         {href ? (
           <Link to={href(row)} className="link">

@@ -9,7 +9,9 @@ export type FlowFormValues = {
   note: string;
   silicon: string;
   incomingThickness: MeasuredText;
-  stack: string;
+  waferKind: string;
+  gateBow: MeasuredText;
+  gateWarp: MeasuredText;
   carrier: string;
   bondingMaterial: string;
 };
@@ -20,6 +22,9 @@ interface FlowHead {
   note: string;
   silicon: { id: string };
   incomingThickness: Measured;
+  waferKind: string;
+  gateBow: Measured | null;
+  gateWarp: Measured | null;
 }
 
 export function flowFormValues(flow: FlowHead): Partial<FlowFormValues> {
@@ -29,5 +34,8 @@ export function flowFormValues(flow: FlowHead): Partial<FlowFormValues> {
     note: flow.note,
     silicon: flow.silicon.id,
     incomingThickness: measuredText(flow.incomingThickness, "length", { unit: "µm" }),
+    waferKind: flow.waferKind,
+    gateBow: measuredText(flow.gateBow, "length", { unit: "µm" }),
+    gateWarp: measuredText(flow.gateWarp, "length", { unit: "µm" }),
   };
 }

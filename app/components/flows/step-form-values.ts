@@ -2,6 +2,7 @@ import type { Measured } from "#app/engine/measured.ts";
 import type { Holding } from "#app/engine/vocabulary.ts";
 import { measuredText, quantityText } from "#app/lib/form-values.ts";
 import type { StepDetail } from "#app/schemas/flow-view.ts";
+import { stepHandlingText, type StepHandlingText } from "./step-handling-values.ts";
 import type { MeasuredText } from "../forms/MeasuredField.tsx";
 
 /** A film that a step adds or removes, as the text of its form. */
@@ -31,6 +32,7 @@ export type StepFormValues = {
   bondThickness: MeasuredText;
   groundFaceForce: MeasuredText;
   films: FilmChangeValues[];
+  handling: StepHandlingText;
 };
 
 const length = (measured: Measured | null, unit = "µm") => measuredText(measured, "length", { unit });
@@ -51,6 +53,7 @@ export function stepFormValues(step: StepDetail): StepFormValues {
     bondingMaterial: step.bondingMaterial?.id ?? "",
     bondThickness: length(step.bondThickness),
     groundFaceForce: measuredText(step.groundFaceForce, "forcePerLength", { unit: "N/m" }),
+    handling: stepHandlingText(step.handling),
     films: step.films.map((film) => ({
       change: film.change,
       side: film.side,

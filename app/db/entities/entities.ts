@@ -6,8 +6,10 @@ import { Credential } from "./credential.ts";
 import { Equipment } from "./equipment.ts";
 import { Film } from "./film.ts";
 import { Flow } from "./flow.ts";
+import { FlowRevision } from "./flow-revision.ts";
 import { FlowStep } from "./flow-step.ts";
 import { FlowStepFilm } from "./flow-step-film.ts";
+import { FlowTemplate } from "./flow-template.ts";
 import { Membership } from "./membership.ts";
 import { Person } from "./person.ts";
 import { Program } from "./program.ts";
@@ -18,6 +20,7 @@ import { Silicon } from "./silicon.ts";
 import { SiteLimit } from "./site-limit.ts";
 import { Stack } from "./stack.ts";
 import { StackLayer } from "./stack-layer.ts";
+import { StepTemplate } from "./step-template.ts";
 
 /** Every entity, listed by hand: the ORM finds nothing by itself. */
 export const entities = [
@@ -37,6 +40,9 @@ export const entities = [
   Flow,
   FlowStep,
   FlowStepFilm,
+  FlowRevision,
+  StepTemplate,
+  FlowTemplate,
   Assessment,
   ScanFile,
   Scan,

@@ -2,6 +2,7 @@ import { defineEntity, p, type InferEntity } from "@mikro-orm/core";
 import type { StepKind } from "#app/engine/flow/model.ts";
 import type { Measured } from "#app/engine/measured.ts";
 import type { Exposure, Holding } from "#app/engine/vocabulary.ts";
+import type { StepHandlingValues } from "#app/schemas/step-handling.ts";
 import { BondingMaterial } from "./bonding-material.ts";
 import { Carrier } from "./carrier.ts";
 import { Equipment } from "./equipment.ts";
@@ -34,6 +35,8 @@ export const FlowStep = defineEntity({
     bondingMaterial: () => p.manyToOne(BondingMaterial).nullable(),
     bondThickness: p.json<Measured>().nullable(),
     groundFaceForce: p.json<Measured>().nullable(),
+    /** contact, times, tape, bumps: what the handling rules ask beyond the physics */
+    handling: p.json<StepHandlingValues>(),
   },
 });
 export type FlowStep = InferEntity<typeof FlowStep>;

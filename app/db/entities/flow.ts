@@ -1,4 +1,5 @@
 import { defineEntity, p, type InferEntity } from "@mikro-orm/core";
+import type { WaferKind } from "#app/engine/flow/handling-inputs.ts";
 import type { Measured } from "#app/engine/measured.ts";
 import { Program } from "./program.ts";
 import { recordProperties } from "./record.ts";
@@ -17,6 +18,10 @@ export const Flow = defineEntity({
     silicon: () => p.manyToOne(Silicon),
     /** silicon as it comes in, m */
     incomingThickness: p.json<Measured>(),
+    waferKind: p.text().$type<WaferKind>(),
+    /** bow and warp that an incoming wafer may have, m: the band is value ± tolerance, the warp the largest */
+    gateBow: p.json<Measured>().nullable(),
+    gateWarp: p.json<Measured>().nullable(),
     ...recordProperties,
   },
 });

@@ -1,10 +1,14 @@
 import { InitialSchema } from "./2026-12-01-initial-schema.ts";
 import { RowLevelSecurity } from "./2026-12-01-row-level-security.ts";
 import { AssessmentDocumentNumber } from "./2026-12-02-assessment-document-number.ts";
+import { FlowHandling } from "./2026-12-03-flow-handling.ts";
+import { FlowRevisionsAndTemplates } from "./2026-12-03-flow-revisions-and-templates.ts";
 
 /** Every migration in the order in which it runs. */
 export const migrations = [
   { name: "2026-12-01-initial-schema", class: InitialSchema },
   { name: "2026-12-01-row-level-security", class: RowLevelSecurity },
   { name: "2026-12-02-assessment-document-number", class: AssessmentDocumentNumber },
+  { name: "2026-12-03-flow-revisions-and-templates", class: FlowRevisionsAndTemplates },
+  { name: "2026-12-03-flow-handling", class: FlowHandling },
 ];

@@ -9,9 +9,11 @@ import { Program } from "../entities/program.ts";
 import { DEMO_PEOPLE } from "./demo-accounts.ts";
 import { addDemoAssessment } from "./demo-assessment.ts";
 import { addDemoFlow } from "./demo-flow.ts";
+import { DEMO_FLOWS } from "./demo-flows.ts";
 import { addDemoLibrary } from "./demo-library.ts";
 import { addDemoScan } from "./demo-scan.ts";
 import { addDemoStack, DEMO_STACKS } from "./demo-stacks.ts";
+import { seedLibrary } from "./seed-library.ts";
 
 const PROGRAMS = [
   { name: "Tern", slug: "tern", diameter: 0.2, purpose: "Fan-in device with one redistribution layer, to 100 µm" },
@@ -19,7 +21,7 @@ const PROGRAMS = [
   { name: "Fulmar", slug: "fulmar", diameter: 0.3, purpose: "Stacked device with through-silicon vias, to 20 µm" },
 ];
 
-/** The invented pilot line: people, library, three programs, the Tern flow whole and assessed, a stack for each program and a scan. */
+/** The invented pilot line: people, library, three programs with their flows whole and a stack each, an assessment and a scan. */
 export class DemoSeeder extends Seeder {
   override async run(em: EntityManager): Promise<void> {
     noteScope(em, { personId: null, requestId: "demo data" });
@@ -38,8 +40,11 @@ export class DemoSeeder extends Seeder {
       const program = programs.find(({ slug }) => slug === stack.program);
       if (program) await addDemoStack(em, program, stack, films);
     }
-    const tern = programs.find(({ slug }) => slug === "tern");
-    if (tern) await addDemoFlow(em, tern, films);
+    const library = await seedLibrary(em);
+    for (const flow of DEMO_FLOWS) {
+      const program = programs.find(({ slug }) => slug === flow.program);
+      if (program) addDemoFlow(em, program, flow, library);
+    }
     await em.flush();
 
     // Read back as the server would read it, so that what is stored is what a person's own run would store.

@@ -7,7 +7,7 @@ import type { Film } from "../entities/film.ts";
 import type { Program } from "../entities/program.ts";
 import { measured } from "./measured.ts";
 import { delivered } from "./reference-seeder.ts";
-import type { DemoAddition } from "./demo-tern.ts";
+import type { DemoAddition } from "./demo-step.ts";
 
 interface DemoStack {
   program: string;
@@ -99,7 +99,8 @@ export async function addDemoStack(
 }
 
 /** The stress of an addition, MPa, as its own when it differs from the film's. */
-export function stressFor(film: Film, stress: number) {
+export function stressFor(film: Film, stress: number | undefined) {
+  if (stress === undefined) return null;
   const pascals = stress * 1e6;
   return film.stress.value === pascals
     ? null

@@ -1,30 +1,5 @@
-import type { StepKind } from "#app/engine/flow/model.ts";
-import type { Exposure, Holding, Side } from "#app/engine/vocabulary.ts";
-
-/** A film put down in the demo: µm and MPa. */
-export interface DemoAddition {
-  side: Side;
-  film: string;
-  thickness: number;
-  stress: number;
-  coverage: number;
-}
-
-/** A step of the demo: °C, minutes, µm, mm, N/m. What is left out does not happen. */
-export interface DemoStep {
-  kind: StepKind;
-  title: string;
-  peak: number;
-  minutes?: number;
-  equipment: string;
-  exposures?: Exposure[];
-  planned: Holding;
-  silicon?: { thickness: number; tolerance: number };
-  adds?: DemoAddition[];
-  removes?: { side: Side; film: string }[];
-  trim?: { width: number; depth: number };
-  groundFaceForce?: number;
-}
+import type { DemoStep } from "./demo-step.ts";
+import { celsius, measured } from "./measured.ts";
 
 /** Program Tern: 200 mm, to 100 µm, redistribution layer and balls, on tape from the grind on. */
 export const TERN_STEPS: DemoStep[] = [
@@ -59,6 +34,7 @@ export const TERN_STEPS: DemoStep[] = [
   {
     kind: "deposit",
     title: "Sputter barrier and seed, 0.3 µm",
+    handling: { dehydrationBake: true },
     peak: 100,
     minutes: 3,
     equipment: "Sputter, electrostatic or clamp chuck",
@@ -134,6 +110,7 @@ export const TERN_STEPS: DemoStep[] = [
   {
     kind: "reflow",
     title: "Ball attach and reflow, 130 µm high",
+    handling: { bumpHeight: measured(130e-6, 8e-6, "measured here") },
     peak: 245,
     minutes: 1,
     equipment: "Reflow oven, belt or plate",
@@ -159,6 +136,13 @@ export const TERN_STEPS: DemoStep[] = [
   {
     kind: "laminate tape",
     title: "Laminate bump-embedding grinding tape, 200 µm embedding layer",
+    handling: {
+      tapeName: "Bump-embedding grinding tape A",
+      tapeTemperatureLimit: measured(celsius(80), null, "supplier"),
+      tapeEmbeddingDepth: measured(200e-6, 10e-6, "supplier"),
+      tapeThicknessVariation: measured(3e-6, null, "supplier"),
+      tapeReleasesInLight: true,
+    },
     peak: 60,
     minutes: 1,
     equipment: "Tape laminator",
@@ -167,6 +151,7 @@ export const TERN_STEPS: DemoStep[] = [
   {
     kind: "grind",
     title: "Grind to 110 µm",
+    handling: { thicknessVariation: measured(1e-6, null, "measured here"), timeSincePrevious: 4 * 3600 },
     peak: 25,
     equipment: "Grinder and polisher",
     exposures: ["water"],
@@ -177,6 +162,7 @@ export const TERN_STEPS: DemoStep[] = [
   {
     kind: "stress relief",
     title: "Dry polish to 100 µm",
+    handling: { thicknessVariation: measured(0.5e-6, null, "measured here"), timeSincePrevious: 600 },
     peak: 25,
     equipment: "Grinder and polisher",
     exposures: ["water"],
@@ -187,6 +173,13 @@ export const TERN_STEPS: DemoStep[] = [
   {
     kind: "mount on frame",
     title: "Mount on film frame in line, peel grinding tape",
+    handling: {
+      inLine: true,
+      timeSincePrevious: 600,
+      tapeName: "Dicing tape A",
+      tapeTemperatureLimit: measured(celsius(80), null, "supplier"),
+      tapeReleasesInLight: true,
+    },
     peak: 60,
     minutes: 1,
     equipment: "Frame mounter",

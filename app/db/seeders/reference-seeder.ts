@@ -2,17 +2,22 @@ import { randomUUID } from "node:crypto";
 import type { EntityManager } from "@mikro-orm/postgresql";
 import { Seeder } from "@mikro-orm/seeder";
 import { LIMIT_DEFINITIONS, type LimitKey } from "#app/engine/rules/limits.ts";
+import type { StepValues } from "#app/schemas/flow.ts";
 import { noteScope } from "#app/server/audit.server.ts";
 import { BondingMaterial } from "../entities/bonding-material.ts";
 import { Carrier } from "../entities/carrier.ts";
 import { Equipment } from "../entities/equipment.ts";
 import { Film } from "../entities/film.ts";
 import { Silicon } from "../entities/silicon.ts";
+import { FlowTemplate } from "../entities/flow-template.ts";
 import { SiteLimit } from "../entities/site-limit.ts";
+import { StepTemplate } from "../entities/step-template.ts";
 import { celsius, measured } from "./measured.ts";
 import { REFERENCE_BONDING_MATERIALS, REFERENCE_CARRIERS, REFERENCE_SILICON } from "./reference-bonding.ts";
 import { REFERENCE_EQUIPMENT, type ReferenceTool } from "./reference-equipment.ts";
 import { REFERENCE_FILMS } from "./reference-films.ts";
+import { seedLibrary } from "./seed-library.ts";
+import { TEMPLATE_FLOWS, templateSteps } from "./template-flows.ts";
 
 /** Who made a seeded record: nobody, it came with Planeward. */
 export const delivered = () => ({
@@ -68,7 +73,30 @@ export class ReferenceSeeder extends Seeder {
           ...material,
         });
     await em.flush();
+    await addTemplates(em);
   }
+}
+
+/** Flow templates, and their steps one by one for the step library. Once somebody has been here, what they took out stays out. */
+async function addTemplates(em: EntityManager): Promise<void> {
+  if ((await em.count(FlowTemplate)) + (await em.count(StepTemplate)) > 0) return;
+  const library = await seedLibrary(em);
+  const steps = new Map<string, StepValues>();
+  for (const template of TEMPLATE_FLOWS) {
+    const { name, note, diameter, incoming } = template;
+    const typed = templateSteps(template, library);
+    for (const step of typed) if (!steps.has(step.title)) steps.set(step.title, step);
+    em.create(FlowTemplate, {
+      ...delivered(),
+      name,
+      note,
+      diameter,
+      incomingThickness: measured(incoming * 1e-6, 20e-6, "assumed", "typical, check it"),
+      steps: typed,
+    });
+  }
+  for (const [name, step] of steps) em.create(StepTemplate, { ...delivered(), name, kind: step.kind, step });
+  await em.flush();
 }
 
 function equipmentFrom(tool: ReferenceTool) {

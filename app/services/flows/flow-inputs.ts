@@ -10,6 +10,7 @@ import type {
   FlowInput,
   StepInput,
 } from "#app/engine/flow/model.ts";
+import { bondHandlingOf, stepHandlingOf } from "#app/lib/flow-handling.ts";
 import type { FlowDetail, StepDetail } from "#app/schemas/flow-view.ts";
 
 /** Flows and library entities as the engine takes them: plain, with the columns that it knows. */
@@ -71,11 +72,21 @@ export function equipmentInput({ id, name, ...tool }: Equipment): EquipmentInput
 }
 
 /** The flow as the engine takes it, complete in itself. */
-export function flowInputOf(flow: Pick<FlowDetail, "name" | "silicon" | "incomingThickness" | "steps">): FlowInput {
+export function flowInputOf(
+  flow: Pick<FlowDetail, "name" | "silicon" | "incomingThickness" | "waferKind" | "gateBow" | "gateWarp" | "steps">,
+): FlowInput {
   const { name, diameter, orientation } = flow.silicon;
+  const { waferKind, gateBow: bow, gateWarp: warp } = flow;
   return {
     name: flow.name,
-    wafer: { name, diameter, orientation, thickness: flow.incomingThickness },
+    wafer: {
+      name,
+      diameter,
+      orientation,
+      thickness: flow.incomingThickness,
+      ...(waferKind === "silicon wafer" ? {} : { kind: waferKind }),
+    },
+    ...(bow || warp ? { gate: { ...(bow && { bow }), ...(warp && { warp }) } } : {}),
     steps: flow.steps.map(stepInputOf),
   };
 }
@@ -100,8 +111,9 @@ function stepInputOf(step: StepDetail): StepInput {
     edgeTrim: step.kind === "edge trim" && trimWidth && trimDepth ? { width: trimWidth, depth: trimDepth } : null,
     bond:
       step.kind === "bond" && carrier && bondingMaterial && bondThickness
-        ? { carrier, material: bondingMaterial, thickness: bondThickness }
+        ? { carrier, material: bondingMaterial, thickness: bondThickness, ...bondHandlingOf(step.handling) }
         : null,
     groundFaceForce: step.groundFaceForce,
+    ...stepHandlingOf(step.handling),
   };
 }

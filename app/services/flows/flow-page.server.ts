@@ -1,12 +1,15 @@
 import type { Measured } from "#app/engine/measured.ts";
 import { planColumns } from "#app/lib/flow-plan.ts";
 import { stepRows, type StepRow } from "#app/lib/flow-rows.ts";
+import { mayOnSite } from "#app/policies/permissions.ts";
+import type { FlowHistory } from "#app/schemas/flow-plan.ts";
 import type { FlowAssessmentRow } from "#app/schemas/flow-view.ts";
 import type { RecordStamp } from "#app/schemas/record-stamp.ts";
 import { inScope, type ActorScope } from "#app/server/scope.server.ts";
 import { idFrom } from "../uuid.server.ts";
 import { flowAssessments } from "./flow-assessments.server.ts";
 import { readFlow } from "./read-flow.server.ts";
+import { flowHistory } from "./revisions.server.ts";
 
 /** A flow as its page shows it: text, not the materials behind it. */
 export interface FlowPage {
@@ -23,17 +26,25 @@ export interface FlowPage {
   plan: ReturnType<typeof planColumns>;
   /** newest first */
   assessments: FlowAssessmentRow[];
+  /** null for those who may only read */
+  history: FlowHistory | null;
   stamp: RecordStamp;
   mayEdit: boolean;
   mayAssess: boolean;
+  /** in the library of the site */
+  mayKeep: boolean;
 }
 
 /** One flow with its rows, its plan to draw and its assessments, newest first. */
 export async function flowPage(scope: ActorScope, flowId: string | undefined): Promise<FlowPage> {
   const id = idFrom(flowId, "flow");
-  const { flow, assessments } = await inScope(scope, async (em) => {
+  const { flow, assessments, history } = await inScope(scope, async (em) => {
     const found = await readFlow(em, scope, id);
-    return { flow: found, assessments: await flowAssessments(em, scope, found) };
+    return {
+      flow: found,
+      assessments: await flowAssessments(em, scope, found),
+      history: found.mayEdit ? await flowHistory(em, id) : null,
+    };
   });
   const { silicon, incomingThickness, steps } = flow;
   const thicknesses = [incomingThickness, ...steps.flatMap(({ siliconAfter }) => siliconAfter ?? [])];
@@ -50,8 +61,10 @@ export async function flowPage(scope: ActorScope, flowId: string | undefined): P
     rows: stepRows(steps, incomingThickness),
     plan: planColumns(steps, incomingThickness),
     assessments,
+    history,
     stamp: flow.stamp,
     mayEdit: flow.mayEdit,
     mayAssess: flow.mayAssess,
+    mayKeep: steps.length > 0 && mayOnSite(scope.actor, "edit the step library"),
   };
 }

@@ -1,17 +1,16 @@
 import { Assessment } from "#app/db/entities/assessment.ts";
 import { FlowStep } from "#app/db/entities/flow-step.ts";
 import { Flow } from "#app/db/entities/flow.ts";
-import { Silicon } from "#app/db/entities/silicon.ts";
 import { PAGE_SIZE, type ListPage, type ListParams } from "#app/lib/list-params.ts";
 import type { FlowDetail, FlowRow } from "#app/schemas/flow-view.ts";
 import type { FlowValues } from "#app/schemas/flow.ts";
-import { notFound, problem } from "#app/server/problem.server.ts";
+import { problem } from "#app/server/problem.server.ts";
 import { inScope, type ActorScope } from "#app/server/scope.server.ts";
 import { escapeLike } from "../like.server.ts";
 import { requireInProgram, requireInSomeProgram } from "../permission.server.ts";
 import { programFilter } from "../program-filter.server.ts";
-import { conflictOf, saving, touch, type Saved } from "../record.server.ts";
 import { idFrom } from "../uuid.server.ts";
+import { changePlan, type FlowSaved } from "./change-flow.server.ts";
 import { findFlow, readFlow } from "./read-flow.server.ts";
 
 export const FLOW_SORTS = ["updated", "name", "program", "diameter"] as const;
@@ -79,24 +78,11 @@ export async function getFlow(scope: ActorScope, id: string | undefined): Promis
 export async function changeFlow(
   scope: ActorScope,
   { id, version, values }: { id: string; version: number | null; values: FlowValues },
-): Promise<Saved> {
-  return saving(() =>
-    inScope(scope, async (em): Promise<Saved> => {
-      const flow = await findFlow(em, scope, id);
-      requireInProgram(scope, "edit stacks and flows", flow.program.id, "flow");
-      const conflict = conflictOf(flow, version);
-      if (conflict) return { outcome: "conflict", conflict };
-      const namesake = await em.findOne(Flow, { program: flow.program.id, name: values.name });
-      if (namesake && namesake.id !== id) return { outcome: "name taken" };
-      const silicon = await em.findOne(Silicon, { id: values.silicon });
-      if (!silicon) throw notFound("silicon wafer");
-      const { name, note, incomingThickness } = values;
-      em.assign(flow, { name, note, silicon, incomingThickness }, { mergeObjectProperties: false });
-      touch(flow, scope);
-      await em.flush();
-      return { outcome: "saved", id };
-    }),
-  );
+): Promise<FlowSaved> {
+  return changePlan(scope, { flowId: id, version }, async ({ plan }) => {
+    const { program: _program, ...head } = values;
+    return { plan: { ...plan, ...head }, words: "Changed name and wafer", shown: id };
+  });
 }
 
 /** Removes a flow that was never assessed; one that was is kept, because its assessments are. */

@@ -1,25 +1,42 @@
-import { FlowStep } from "#app/db/entities/flow-step.ts";
+import { randomUUID } from "node:crypto";
 import { Flow } from "#app/db/entities/flow.ts";
 import { Silicon } from "#app/db/entities/silicon.ts";
+import type { FlowPlan } from "#app/schemas/flow-plan.ts";
 import type { FlowValues, StepValues } from "#app/schemas/flow.ts";
 import { notFound } from "#app/server/problem.server.ts";
 import { inScope, type ActorScope } from "#app/server/scope.server.ts";
 import { requireInProgram } from "../permission.server.ts";
 import { newRecord, saving, type Saved } from "../record.server.ts";
+import { readPlan, writePlan } from "./plan.server.ts";
 import { findFlow } from "./read-flow.server.ts";
-import { addStep, copyStep } from "./steps.server.ts";
+import { addFirstRevision } from "./revisions.server.ts";
+
+/** The steps that a new flow begins with, and the words for that. */
+export interface FirstSteps {
+  steps: StepValues[];
+  words: string;
+}
 
 /** Adds a flow, with its first steps when there are any, in one transaction. */
-export async function createFlow(scope: ActorScope, values: FlowValues, steps: StepValues[] = []): Promise<Saved> {
+export async function createFlow(
+  scope: ActorScope,
+  values: FlowValues,
+  { steps, words }: FirstSteps = { steps: [], words: "Began empty" },
+): Promise<Saved> {
   requireInProgram(scope, "edit stacks and flows", values.program, "program");
   return saving(() =>
     inScope(scope, async (em): Promise<Saved> => {
-      const { program, name, note, incomingThickness } = values;
-      if (await em.findOne(Flow, { program, name })) return { outcome: "name taken" };
+      const { program, ...head } = values;
+      if (await em.findOne(Flow, { program, name: head.name })) return { outcome: "name taken" };
       const silicon = await em.findOne(Silicon, { id: values.silicon });
       if (!silicon) throw notFound("silicon wafer");
-      const flow = em.create(Flow, { ...newRecord(scope), program, name, note, silicon, incomingThickness });
-      for (const [position, step] of steps.entries()) await addStep(em, flow, position, step);
+      const flow = em.create(Flow, { ...newRecord(scope), ...head, program, silicon });
+      const plan: FlowPlan = {
+        ...head,
+        steps: steps.map((step) => ({ ...step, id: randomUUID() })),
+      };
+      await writePlan(em, flow, { plan: { ...plan, steps: [] }, steps: new Map(), films: new Map() }, plan);
+      addFirstRevision(em, scope, flow, plan, words);
       await em.flush();
       return { outcome: "saved", id: flow.id };
     }),
@@ -37,20 +54,29 @@ function copyName(name: string, taken: Set<string>): string {
   }
 }
 
+/** People who copy the same flow at the same moment, at most. */
+const ATTEMPTS = 5;
+
 /** Copies a flow with all its steps into the same program; its assessments stay with the original. */
 export async function copyFlow(scope: ActorScope, id: string): Promise<Saved> {
-  return saving(() =>
-    inScope(scope, async (em): Promise<Saved> => {
-      const original = await findFlow(em, scope, id);
-      const { program, silicon, note, incomingThickness } = original;
-      requireInProgram(scope, "edit stacks and flows", program.id, "flow");
-      const names = await em.find(Flow, { program: program.id }, { fields: ["name"] });
-      const name = copyName(original.name, new Set(names.map((flow) => flow.name)));
-      const copy = em.create(Flow, { ...newRecord(scope), program, name, note, silicon, incomingThickness });
-      const steps = await em.find(FlowStep, { flow: original.id }, { orderBy: { position: "asc" } });
-      for (const step of steps) await copyStep(em, step, { flow: copy });
-      await em.flush();
-      return { outcome: "saved", id: copy.id };
-    }),
-  );
+  let saved = await copyOnce(scope, id);
+  // Somebody who copied it in the same moment has taken the name: the next one is free.
+  for (let attempt = 1; attempt < ATTEMPTS && saved.outcome === "name taken"; attempt++)
+    saved = await copyOnce(scope, id);
+  return saved;
+}
+
+async function copyOnce(scope: ActorScope, id: string): Promise<Saved> {
+  const { head, first } = await inScope(scope, async (em) => {
+    const original = await findFlow(em, scope, id);
+    const names = await em.find(Flow, { program: original.program.id }, { fields: ["name"] });
+    const { plan } = await readPlan(em, original);
+    const { steps, ...rest } = plan;
+    const name = copyName(original.name, new Set(names.map((flow) => flow.name)));
+    return {
+      head: { ...rest, program: original.program.id, name },
+      first: { steps, words: `Copied from ${original.name}` },
+    };
+  });
+  return createFlow(scope, head, first);
 }

@@ -1,14 +1,13 @@
 import type { EntityManager } from "@mikro-orm/postgresql";
-import { FlowStepFilm } from "#app/db/entities/flow-step-film.ts";
-import { FlowStep } from "#app/db/entities/flow-step.ts";
 import { Flow } from "#app/db/entities/flow.ts";
 import { mayInProgram } from "#app/policies/permissions.ts";
-import type { FlowDetail, StepDetail, StepFilmDetail } from "#app/schemas/flow-view.ts";
+import type { FlowDetail, StepDetail } from "#app/schemas/flow-view.ts";
 import { notFound } from "#app/server/problem.server.ts";
 import type { ActorScope } from "#app/server/scope.server.ts";
 import { requireInProgram } from "../permission.server.ts";
 import { stampOf } from "../record.server.ts";
-import { bondingMaterialInput, carrierInput, equipmentInput, filmInput } from "./flow-inputs.ts";
+import { readPlans } from "./plan.server.ts";
+import { stepDetails } from "./step-details.server.ts";
 
 type FlowContent = Omit<FlowDetail, "mayEdit" | "mayAssess">;
 
@@ -39,26 +38,21 @@ export async function flowDetails(em: EntityManager, scope: ActorScope, flows: F
 
 /** What flows are, whoever asks: heads, with program, silicon and last editor loaded, and steps in order. */
 export async function flowContents(em: EntityManager, flows: Flow[]): Promise<FlowContent[]> {
-  const steps = await em.find(
-    FlowStep,
-    { flow: { $in: flows.map(({ id }) => id) } },
-    { populate: ["equipment", "carrier", "bondingMaterial"], orderBy: { position: "asc" } },
+  const plans = await readPlans(em, flows);
+  const details = await stepDetails(
+    em,
+    plans.flatMap(({ plan }) => plan.steps),
   );
-  const films = await em.find(
-    FlowStepFilm,
-    { step: { $in: steps.map((step) => step.id) } },
-    { populate: ["film"], orderBy: { position: "asc" } },
-  );
-  return flows.map((flow) =>
-    flowContent(
-      flow,
-      steps.filter((step) => step.flow.id === flow.id),
-      films,
-    ),
-  );
+  let from = 0;
+  return flows.map((flow, index) => {
+    const count = plans[index]?.plan.steps.length ?? 0;
+    const steps = details.slice(from, from + count);
+    from += count;
+    return flowContent(flow, steps);
+  });
 }
 
-function flowContent(flow: Flow, steps: FlowStep[], films: FlowStepFilm[]): FlowContent {
+function flowContent(flow: Flow, steps: StepDetail[]): FlowContent {
   const { program, silicon } = flow;
   return {
     id: flow.id,
@@ -72,41 +66,10 @@ function flowContent(flow: Flow, steps: FlowStep[], films: FlowStepFilm[]): Flow
       orientation: silicon.orientation,
     },
     incomingThickness: flow.incomingThickness,
-    steps: steps.map((step) =>
-      stepDetail(
-        step,
-        films.filter((film) => film.step.id === step.id),
-      ),
-    ),
+    waferKind: flow.waferKind,
+    gateBow: flow.gateBow ?? null,
+    gateWarp: flow.gateWarp ?? null,
+    steps,
     stamp: stampOf(flow),
-  };
-}
-
-function stepDetail(step: FlowStep, films: FlowStepFilm[]): StepDetail {
-  return {
-    id: step.id,
-    kind: step.kind,
-    title: step.title,
-    peakTemperature: step.peakTemperature,
-    holdTime: step.holdTime ?? null,
-    equipment: step.equipment ? equipmentInput(step.equipment) : null,
-    exposures: step.exposures,
-    planned: step.planned,
-    siliconAfter: step.siliconAfter ?? null,
-    trimWidth: step.trimWidth ?? null,
-    trimDepth: step.trimDepth ?? null,
-    carrier: step.carrier ? carrierInput(step.carrier) : null,
-    bondingMaterial: step.bondingMaterial ? bondingMaterialInput(step.bondingMaterial) : null,
-    bondThickness: step.bondThickness ?? null,
-    groundFaceForce: step.groundFaceForce ?? null,
-    films: films.map((film): StepFilmDetail => ({
-      change: film.change,
-      side: film.side,
-      film: filmInput(film.film),
-      thickness: film.thickness ?? null,
-      ownStress: film.stress ?? null,
-      stress: film.stress ?? film.film.stress,
-      coverage: film.coverage,
-    })),
   };
 }

@@ -7,6 +7,7 @@ import { FlowSteps } from "#app/components/flows/FlowSteps.tsx";
 import { planColumns } from "#app/lib/flow-plan.ts";
 import { stepRows, type ShownStep } from "#app/lib/flow-rows.ts";
 import type { Measured } from "#app/engine/measured.ts";
+import type { FlowHistory } from "#app/schemas/flow-plan.ts";
 import type { FlowAssessmentRow } from "#app/schemas/flow-view.ts";
 
 const stated = (value: number): Measured => ({ value, tolerance: null, source: "supplier" });
@@ -31,6 +32,16 @@ const step = (id: string, overrides: Partial<ShownStep> = {}): ShownStep => ({
 });
 const steps = [step("a"), step("b", { equipment: null }), step("c", { planned: "film frame" })];
 
+const lines: FlowHistory["lines"] = [
+  {
+    number: 2,
+    kind: "edit",
+    words: "Moved step 1, Step called b, to 2",
+    by: "Ines Varga",
+    at: "2026-12-01T10:00:00.000Z",
+  },
+];
+
 function render(element: React.ReactNode, at = "/"): string {
   const Stub = createRoutesStub([{ path: "/", Component: () => element }]);
   return renderToStaticMarkup(<Stub initialEntries={[at]} />);
@@ -38,7 +49,15 @@ function render(element: React.ReactNode, at = "/"): string {
 
 const table = (options: Partial<Parameters<typeof FlowSteps>[0]> = {}, at?: string) =>
   render(
-    <FlowSteps flowId="f" version={3} rows={stepRows(steps, stated(725e-6))} mayEdit fault={null} {...options} />,
+    <FlowSteps
+      flowId="f"
+      version={3}
+      rows={stepRows(steps, stated(725e-6))}
+      history={null}
+      mayEdit
+      fault={null}
+      {...options}
+    />,
     at,
   );
 
@@ -66,14 +85,17 @@ describe("the steps of a flow", () => {
     expect(off.map((button) => /value="([^"]*)"/.exec(button)?.[1])).toEqual(["up a", "down c"]);
   });
 
-  it("marks the row that was worked on, says where it is now, and asks before it removes one", () => {
-    const moved = table({}, "/?step=b&moved=down");
-    expect(moved).toContain("Moved down: Step called b is now step 2.");
+  it("marks the row that was worked on, and says what was done with the way back", () => {
+    const moved = table({ history: { undo: "moved step 1", redo: null, lines } }, "/?step=b&done=down");
     expect(moved.match(/aria-current="true"/g)).toHaveLength(1);
-    const asked = table({}, "/?remove=b");
-    expect(asked).toContain("Remove step 2, Step called b");
-    expect(asked).toContain('value="remove b"');
-    expect(table({ mayEdit: false }, "/?remove=b")).not.toContain("remove b");
+    expect(moved).toContain("Moved step 1, Step called b, to 2.");
+    expect(moved).toContain('title="Undo: moved step 1"');
+    expect(/<button[^>]*value="redo"[^>]*>/.exec(moved)?.[0]).toContain('aria-disabled="true"');
+    expect(/<button[^>]*value="undo"[^>]*>/.exec(moved)?.[0]).not.toContain("aria-disabled=");
+  });
+
+  it("offers the way back also when no step is left", () => {
+    expect(table({ rows: [], history: { undo: "removed step 1", redo: null, lines } })).toContain('value="undo"');
   });
 
   it("gives the reason at the step that cannot be computed, and names a missing tool", () => {

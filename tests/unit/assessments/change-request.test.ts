@@ -1,6 +1,7 @@
 import { describe, expect, it } from "vitest";
 import { defaultLimits } from "#app/engine/rules/limits.ts";
 import type { FlowInput, StepInput } from "#app/engine/flow/model.ts";
+import { BLANK_STEP } from "#app/lib/blank-step.ts";
 import { readChangeForm } from "#app/lib/change-request-form.ts";
 import { SITE_SUBJECTS, subjectKey, withChange } from "#app/lib/change-request.ts";
 import { reachSentence } from "#app/lib/change-reach-words.ts";
@@ -21,6 +22,9 @@ function detail(name: string, own: readonly string[] = []): FlowDetail {
     program: { id: "p", name: "Tern", slug: "tern" },
     silicon: { id: "s", name: "Silicon (001)", diameter: flow.wafer.diameter, orientation: "100" },
     incomingThickness: flow.wafer.thickness,
+    waferKind: "silicon wafer",
+    gateBow: null,
+    gateWarp: null,
     steps: flow.steps.map((step, index) => stepDetail(step, index, own)),
     stamp: { version: 1, updatedAt: "2026-12-01T00:00:00.000Z", updatedBy: "Ines Varga" },
     mayEdit: true,
@@ -31,6 +35,7 @@ function detail(name: string, own: readonly string[] = []): FlowDetail {
 const stepDetail = (step: StepInput, index: number, own: readonly string[]): StepDetail => ({
   ...step,
   id: String(index),
+  handling: BLANK_STEP.handling,
   trimWidth: null,
   trimDepth: null,
   carrier: step.bond?.carrier ?? null,

@@ -17,10 +17,16 @@ export const meta: Route.MetaFunction = ({ loaderData }) => [
 
 export async function loader({ context, params }: Route.LoaderArgs) {
   const scope = scopeOf(context);
-  const { id, name, note, program, silicon, incomingThickness, stamp } = await getFlow(scope, params.flowId);
-  requireInProgram(scope, "edit stacks and flows", program.id, "flow");
+  const {
+    steps: _steps,
+    mayEdit: _mayEdit,
+    mayAssess: _mayAssess,
+    stamp,
+    ...flow
+  } = await getFlow(scope, params.flowId);
+  requireInProgram(scope, "edit stacks and flows", flow.program.id, "flow");
   const { silicon: wafers } = await headChoices(scope);
-  return { flow: { id, name, note, program, silicon, incomingThickness }, stamp, wafers };
+  return { flow, stamp, wafers };
 }
 
 export async function action({ request, context, params }: Route.ActionArgs) {

@@ -1,10 +1,12 @@
 import { data, Link, redirect, type ShouldRevalidateFunctionArgs } from "react-router";
 import { FlowAnswer } from "#app/components/flows/FlowAnswer.tsx";
+import { FlowConflictNotice } from "#app/components/flows/FlowConflictNotice.tsx";
 import { FlowFigures } from "#app/components/flows/FlowFigures.tsx";
 import { FlowPlan } from "#app/components/flows/FlowPlan.tsx";
-import { FlowSteps } from "#app/components/flows/FlowSteps.tsx";
+import { FlowSteps, STEPS_FORM } from "#app/components/flows/FlowSteps.tsx";
 import { IntentForm } from "#app/components/flows/IntentForm.tsx";
 import { RemoveFlow } from "#app/components/flows/RemoveFlow.tsx";
+import { WhatIf } from "#app/components/flows/WhatIf.tsx";
 import { PageHead } from "#app/components/layout/PageHead.tsx";
 import { Notice } from "#app/components/ui/Notice.tsx";
 import { flowFigures } from "#app/lib/flow-figures.ts";
@@ -34,7 +36,7 @@ export function shouldRevalidate({ actionStatus, defaultShouldRevalidate }: Shou
 
 export default function FlowRoute({ loaderData: flow, actionData }: Route.ComponentProps) {
   const fault = actionData && "fault" in actionData ? actionData.fault : null;
-  const conflict = actionData && "conflict" in actionData ? actionData.conflict : null;
+  const conflicted = actionData && "conflict" in actionData ? actionData : null;
   const { stamp, mayEdit, mayAssess, assessments } = flow;
   return (
     <>
@@ -50,6 +52,17 @@ export default function FlowRoute({ loaderData: flow, actionData }: Route.Compon
                   <Link to="edit" className="btn">
                     Name and wafer
                   </Link>
+                  {flow.mayKeep && (
+                    <IntentForm
+                      intent="keep flow"
+                      action="/flows/library/flows"
+                      fields={{ flow: flow.id }}
+                      busy="Keeping"
+                      className="btn"
+                    >
+                      Keep as template
+                    </IntentForm>
+                  )}
                   <IntentForm intent="copy" busy="Copying" className="btn">
                     Copy
                   </IntentForm>
@@ -64,13 +77,13 @@ export default function FlowRoute({ loaderData: flow, actionData }: Route.Compon
           )
         }
       />
-      {conflict && (
-        <Notice
-          kind="error"
-          title={`${conflict.by} changed this flow at ${conflict.at.slice(0, 16).replace("T", " ")} UTC, after you had opened it`}
-        >
-          Nothing of yours was done. The steps below are as they are now: please do it again if it still makes sense.
-        </Notice>
+      {conflicted && (
+        <FlowConflictNotice
+          conflict={conflicted.conflict}
+          again={conflicted.again}
+          flowId={flow.id}
+          form={STEPS_FORM}
+        />
       )}
       {fault && (
         <Notice
@@ -90,6 +103,11 @@ export default function FlowRoute({ loaderData: flow, actionData }: Route.Compon
             <FlowPlan steps={flow.plan} />
           </div>
         )}
+        {mayAssess && flow.rows.length > 0 && (
+          <div className="screen-only border-t border-ink">
+            <WhatIf flowId={flow.id} version={stamp.version} mayEdit={mayEdit} />
+          </div>
+        )}
         <section className="border-t border-ink" aria-labelledby="steps-head">
           <h2 id="steps-head" className="sr-only">
             Steps
@@ -98,6 +116,7 @@ export default function FlowRoute({ loaderData: flow, actionData }: Route.Compon
             flowId={flow.id}
             version={stamp.version}
             rows={flow.rows}
+            history={flow.history}
             mayEdit={mayEdit}
             fault={fault && fault.step !== null ? { step: fault.step, reason: fault.reason } : null}
           />

@@ -86,6 +86,12 @@ export default function Flows({ loaderData }: Route.ComponentProps) {
             <Link to="/assessments/change-request" className="btn">
               What would change?
             </Link>
+            <Link to="/flows/library/flows" className="btn">
+              Templates
+            </Link>
+            <Link to="/flows/library/steps" className="btn">
+              Step library
+            </Link>
             {add}
           </>
         }

@@ -1,5 +1,6 @@
 import { data, redirect } from "react-router";
 import { FlowForm } from "#app/components/flows/FlowForm.tsx";
+import { NewFlowOffers } from "#app/components/flows/NewFlowOffers.tsx";
 import { StepTable } from "#app/components/flows/StepTable.tsx";
 import { PageHead } from "#app/components/layout/PageHead.tsx";
 import { newFlowSchema } from "#app/schemas/flow.ts";
@@ -11,7 +12,7 @@ import type { Route } from "./+types/new";
 export const meta: Route.MetaFunction = () => [{ title: "New flow · Planeward" }];
 
 export async function loader({ context, url }: Route.LoaderArgs) {
-  return newFlowPage(scopeOf(context), url.searchParams.get("stack"));
+  return newFlowPage(scopeOf(context), url.searchParams);
 }
 
 export async function action({ request, context }: Route.ActionArgs) {
@@ -24,36 +25,44 @@ export async function action({ request, context }: Route.ActionArgs) {
   throw redirect(`/flows/${added.id}`);
 }
 
+const BACK = { stack: "/stacks", template: "/flows/library/flows", flow: "/flows" };
+
+const PROPOSED =
+  "How these films could come onto the wafer and how it could be thinned. What the stack does not say is assumed: go through the steps afterwards and put in your own.";
+const TAKEN = "Every step as it is there. Change them afterwards: what this starts from stays as it is.";
+
 export default function NewFlow({ loaderData, actionData }: Route.ComponentProps) {
-  const { proposal, values, program, silicon, bond } = loaderData;
+  const { origin, offers, values, program, silicon, bond } = loaderData;
+  const proposed = origin?.kind === "stack";
   return (
     <>
       <PageHead
-        title={proposal ? `New flow from ${proposal.stack.name}` : "New flow"}
+        title={origin ? `New flow from ${origin.name}` : "New flow"}
         crumbs={[{ name: "Flows", path: "/flows" }]}
       />
-      <FlowForm
-        values={values}
-        version={null}
-        program={program}
-        silicon={silicon}
-        bond={bond}
-        stack={proposal?.stack.id}
-        lastResult={actionData?.lastResult}
-        back={proposal ? `/stacks/${proposal.stack.id}` : "/flows"}
-        save={proposal ? "Save with the steps below" : "Save and add steps"}
-      />
-      {proposal && (
+      <div className={offers ? "grid gap-4 wide:grid-cols-[minmax(0,60rem)_minmax(0,1fr)]" : undefined}>
+        <FlowForm
+          key={origin?.id}
+          values={values}
+          version={null}
+          program={program}
+          silicon={silicon}
+          bond={bond}
+          origin={origin}
+          lastResult={actionData?.lastResult}
+          back={origin ? `${BACK[origin.kind]}/${origin.id}` : "/flows"}
+          save={origin ? "Save with the steps below" : "Save and add steps"}
+        />
+        {offers && <NewFlowOffers {...offers} />}
+      </div>
+      {origin && (
         <section className="mt-6" aria-labelledby="proposal-head">
           <h2 id="proposal-head" className="text-figure font-medium">
-            Steps proposed
+            {proposed ? "Steps proposed" : `${origin.rows.length} steps`}
           </h2>
-          <p className="mt-1 mb-3 max-w-160 text-quiet">
-            How these films could come onto the wafer and how it could be thinned. What the stack does not say is
-            assumed: go through the steps afterwards and put in your own.
-          </p>
+          <p className="mt-1 mb-3 max-w-160 text-quiet">{proposed ? PROPOSED : TAKEN}</p>
           <div className="frame">
-            <StepTable caption="Steps proposed" rows={proposal.rows} />
+            <StepTable caption={proposed ? "Steps proposed" : "Steps it starts with"} rows={origin.rows} />
           </div>
         </section>
       )}

@@ -1,0 +1,71 @@
+import { useEffect, useRef, useState, type PointerEvent } from "react";
+
+interface Drag {
+  id: string;
+  /** the step goes before the row of this index; the number of rows is the end */
+  before: number;
+}
+
+/** Height of the bands at the edges of the window in which dragging scrolls, px. */
+const EDGE = 72;
+const SCROLL = 14;
+
+const stepRows = () => [...document.querySelectorAll<HTMLElement>("tr[id^='step-']")];
+
+/** Index of the row before which a pointer at this height would drop. */
+function placeAt(y: number): number {
+  const rows = stepRows();
+  const below = rows.findIndex((row) => {
+    const { top, height } = row.getBoundingClientRect();
+    return y < top + height / 2;
+  });
+  return below < 0 ? rows.length : below;
+}
+
+/**
+ * Moves rows of the step table by a handle, with mouse, pen or finger. `onDrop` is told the step and its new number, from 1, and only
+ * when that is another. Escape lets go. Everything that it does can be done by the buttons of the row too.
+ */
+export function useStepDrag(onDrop: (id: string, number: number) => void) {
+  const [drag, setDrag] = useState<Drag | null>(null);
+  const current = useRef<Drag | null>(null);
+  const show = (next: Drag | null) => {
+    current.current = next;
+    setDrag(next);
+  };
+  const dragging = drag !== null;
+  useEffect(() => {
+    if (!dragging) return undefined;
+    const letGo = (event: KeyboardEvent) => {
+      if (event.key !== "Escape") return;
+      current.current = null;
+      setDrag(null);
+    };
+    window.addEventListener("keydown", letGo);
+    return () => window.removeEventListener("keydown", letGo);
+  }, [dragging]);
+  const handle = (id: string) => ({
+    onPointerDown: (event: PointerEvent<HTMLElement>) => {
+      if (event.button !== 0) return;
+      event.preventDefault();
+      event.currentTarget.setPointerCapture(event.pointerId);
+      show({ id, before: placeAt(event.clientY) });
+    },
+    onPointerMove: (event: PointerEvent<HTMLElement>) => {
+      if (!current.current) return;
+      if (event.clientY < EDGE && event.movementY < 0) window.scrollBy(0, -SCROLL);
+      else if (event.clientY > window.innerHeight - EDGE && event.movementY > 0) window.scrollBy(0, SCROLL);
+      show({ id, before: placeAt(event.clientY) });
+    },
+    onPointerUp: () => {
+      const dropped = current.current;
+      show(null);
+      if (!dropped) return;
+      const from = stepRows().findIndex((row) => row.id === `step-${dropped.id}`);
+      const to = dropped.before > from ? dropped.before - 1 : dropped.before;
+      if (from >= 0 && to !== from) onDrop(dropped.id, to + 1);
+    },
+    onPointerCancel: () => show(null),
+  });
+  return { drag, handle };
+}

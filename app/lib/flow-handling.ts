@@ -1,0 +1,59 @@
+import type { BondHandling, Resistances, StepHandling, TapeInput } from "#app/engine/flow/handling-inputs.ts";
+import type { StepHandlingValues } from "#app/schemas/step-handling.ts";
+
+type Given<Value> = { [Key in keyof Value]: NonNullable<Value[Key]> };
+
+/** What is given of a record; what is missing is left out, so that an answer does not change when a question is added. */
+function given<Value extends object>(record: Value): Partial<Given<Value>> {
+  return Object.fromEntries(
+    Object.entries(record).filter(([, value]) => value !== null && value !== undefined),
+  ) as Partial<Given<Value>>;
+}
+
+function tapeOf(handling: StepHandlingValues): TapeInput | null {
+  const word = (key: "Vacuum" | "Plasma" | "Solvent" | "Acid" | "Base" | "Ultraviolet") => {
+    const stands = handling[`tape${key}`];
+    return stands === null ? null : { word: stands };
+  };
+  const resistances: Resistances = given({
+    vacuum: word("Vacuum"),
+    plasma: word("Plasma"),
+    solvent: word("Solvent"),
+    acid: word("Acid"),
+    base: word("Base"),
+    ultraviolet: word("Ultraviolet"),
+  });
+  const tape = given({
+    temperatureLimit: handling.tapeTemperatureLimit,
+    embeddingDepth: handling.tapeEmbeddingDepth,
+    thicknessVariation: handling.tapeThicknessVariation,
+    longestTime: handling.tapeLongestTime,
+    releasesInLight: handling.tapeReleasesInLight,
+    resistances: Object.keys(resistances).length > 0 ? resistances : null,
+  });
+  if (Object.keys(tape).length === 0 && handling.tapeName === null) return null;
+  return { name: handling.tapeName ?? "the tape", ...tape };
+}
+
+/** A step's handling as the engine takes it. */
+export function stepHandlingOf(handling: StepHandlingValues): StepHandling {
+  const { exposureTimes, contactFace, contactMeans, bumpHeight, bumpPeelForce } = handling;
+  return given({
+    exposureTimes: Object.keys(exposureTimes).length > 0 ? exposureTimes : null,
+    solvent: handling.solvent,
+    dehydrationBake: handling.dehydrationBake,
+    contact: contactFace && contactMeans ? { face: contactFace, means: contactMeans } : null,
+    tape: tapeOf(handling),
+    inLine: handling.inLine,
+    timeSincePrevious: handling.timeSincePrevious,
+    bumps: bumpHeight ? { height: bumpHeight, ...given({ standsPeelForce: bumpPeelForce }) } : null,
+    topography: handling.topography,
+    viaProtrusion: handling.viaProtrusion,
+    thicknessVariation: handling.thicknessVariation,
+  });
+}
+
+/** What is given of the bond that a step makes. */
+export function bondHandlingOf({ bondFace, bondThicknessVariation }: StepHandlingValues): BondHandling {
+  return given({ face: bondFace, thicknessVariation: bondThicknessVariation });
+}

@@ -1,0 +1,65 @@
+import { EngineInputError } from "#app/engine/errors.ts";
+import { answerSentences } from "#app/engine/flow/answer.ts";
+import { assessFlow, type AssessedStep, type FlowAssessment } from "#app/engine/flow/assess.ts";
+import type { FlowInput } from "#app/engine/flow/model.ts";
+import type { SiteLimits } from "#app/engine/rules/limits.ts";
+import { formatQuantity } from "#app/engine/units/format.ts";
+import type { Outcome } from "#app/engine/vocabulary.ts";
+
+/** An assessment made in the browser: the engine's own, with its sentences; or why there is none. */
+export type Answer =
+  { computed: true; assessment: FlowAssessment; sentences: string[] } | { computed: false; reason: string };
+
+/** Assesses a flow as the server would, with the same code. */
+export function answerOf(input: FlowInput, limits: SiteLimits): Answer {
+  try {
+    const assessment = assessFlow(input, limits);
+    return { computed: true, assessment, sentences: answerSentences(input, assessment) };
+  } catch (error) {
+    if (!(error instanceof EngineInputError)) throw error;
+    const step = /^steps\[(\d+)\]/.exec(error.field)?.[1];
+    const place = step === undefined ? "" : `Step ${Number(step) + 1}: `;
+    return { computed: false, reason: `${place}${error.reason}.` };
+  }
+}
+
+/** How the wafer lies after a step, in words; a curled one has a radius, never a bow. */
+function lies({ state }: AssessedStep): string {
+  const { atRoom } = state;
+  if (!atRoom) return "held flat";
+  if (atRoom.rollRadius !== null)
+    return `rolls up, radius ${formatQuantity(atRoom.rollRadius, "length", { unit: "mm" })}`;
+  if (state.lies === "flat") return "flat";
+  return `${state.lies} ${formatQuantity(atRoom.warp, "length", { unit: "µm", significant: 3 })}`;
+}
+
+/** A step that comes out otherwise than before. */
+export interface StepChange {
+  number: number;
+  title: string;
+  was: { outcome: Outcome; lies: string };
+  becomes: { outcome: Outcome; lies: string };
+}
+
+/** Less than this share of change in a warp is not worth a row. */
+const NOTABLE = 0.02;
+
+/** The steps whose outcome, support or shape differ between two assessments of the same steps. */
+export function changedSteps(before: FlowAssessment, after: FlowAssessment): StepChange[] {
+  return before.steps.flatMap((was, index): StepChange[] => {
+    const becomes = after.steps[index];
+    if (!becomes) return [];
+    const [old, now] = [was.state.atRoom?.warp ?? 0, becomes.state.atRoom?.warp ?? 0];
+    const bends = Math.abs(now - old) > NOTABLE * Math.max(Math.abs(old), Math.abs(now));
+    if (was.outcome === becomes.outcome && lies(was) === lies(becomes)) return [];
+    if (was.outcome === becomes.outcome && !bends) return [];
+    return [
+      {
+        number: was.state.number,
+        title: was.state.step.title,
+        was: { outcome: was.outcome, lies: lies(was) },
+        becomes: { outcome: becomes.outcome, lies: lies(becomes) },
+      },
+    ];
+  });
+}

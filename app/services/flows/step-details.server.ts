@@ -1,0 +1,63 @@
+import type { EntityManager } from "@mikro-orm/postgresql";
+import { BondingMaterial } from "#app/db/entities/bonding-material.ts";
+import { Carrier } from "#app/db/entities/carrier.ts";
+import { Equipment } from "#app/db/entities/equipment.ts";
+import { Film } from "#app/db/entities/film.ts";
+import type { StepPlan } from "#app/schemas/flow-plan.ts";
+import type { StepDetail, StepFilmDetail } from "#app/schemas/flow-view.ts";
+import { bondingMaterialInput, carrierInput, equipmentInput, filmInput } from "./flow-inputs.ts";
+
+interface Library {
+  tools: Map<string, Equipment>;
+  carriers: Map<string, Carrier>;
+  materials: Map<string, BondingMaterial>;
+  films: Map<string, Film>;
+}
+
+const present = (ids: (string | null)[]) => [...new Set(ids.filter((id) => id !== null))];
+const byId = <Entity extends { id: string }>(entities: Entity[]) =>
+  new Map(entities.map((entity) => [entity.id, entity]));
+
+async function usedLibrary(em: EntityManager, steps: StepPlan[]): Promise<Library> {
+  const named = (ids: (string | null)[]) => ({ id: { $in: present(ids) } });
+  return {
+    tools: byId(await em.find(Equipment, named(steps.map(({ equipment }) => equipment)))),
+    carriers: byId(await em.find(Carrier, named(steps.map(({ carrier }) => carrier)))),
+    materials: byId(await em.find(BondingMaterial, named(steps.map(({ bondingMaterial }) => bondingMaterial)))),
+    films: byId(await em.find(Film, named(steps.flatMap(({ films }) => films.map(({ film }) => film))))),
+  };
+}
+
+/** Steps with all that they use read out of the library, in the order given. */
+export async function stepDetails(em: EntityManager, steps: StepPlan[]): Promise<StepDetail[]> {
+  const library = await usedLibrary(em, steps);
+  return steps.map((step) => stepDetail(step, library));
+}
+
+function stepDetail(step: StepPlan, { tools, carriers, materials, films }: Library): StepDetail {
+  const { equipment, carrier, bondingMaterial, films: changes, ...typed } = step;
+  const found = <Entity, Input>(id: string | null, map: Map<string, Entity>, toInput: (entity: Entity) => Input) => {
+    const entity = id === null ? undefined : map.get(id);
+    return entity ? toInput(entity) : null;
+  };
+  return {
+    ...typed,
+    equipment: found(equipment, tools, equipmentInput),
+    carrier: found(carrier, carriers, carrierInput),
+    bondingMaterial: found(bondingMaterial, materials, bondingMaterialInput),
+    films: changes.flatMap(({ film: id, stress, thickness, coverage, ...change }): StepFilmDetail[] => {
+      const film = films.get(id);
+      if (!film) return [];
+      return [
+        {
+          ...change,
+          film: filmInput(film),
+          thickness,
+          ownStress: stress,
+          stress: stress ?? film.stress,
+          coverage: coverage ?? 1,
+        },
+      ];
+    }),
+  };
+}
