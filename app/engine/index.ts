@@ -134,3 +134,24 @@ export {
 export { bumpCoverWorking, thicknessBudgetWorking } from "./thickness-budget/working.ts";
 export { dieAfterDicing, type DieAfterDicing, type DieAtTemperature, type DieInput } from "./die/die-after-dicing.ts";
 export { dieWarpWorking } from "./die/working.ts";
+
+// What the handling rules ask beyond the physics
+export {
+  CLAMPINGS,
+  CONTACT_MEANS,
+  RESISTANCE_WORDS,
+  SOLVENT_FAMILIES,
+  WAFER_KINDS,
+  type BumpsInput,
+  type Clamping,
+  type ContactInput,
+  type ContactMeans,
+  type IncomingGate,
+  type Resistance,
+  type Resistances,
+  type ResistanceWord,
+  type SolventFamily,
+  type StressRecord,
+  type TapeInput,
+  type WaferKind,
+} from "./flow/handling-inputs.ts";

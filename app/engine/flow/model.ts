@@ -1,11 +1,24 @@
 import type { Measured } from "../measured.ts";
 import type { Exposure, Holding, Side } from "../vocabulary.ts";
+import type {
+  BondHandling,
+  BondingMaterialHandling,
+  CarrierHandling,
+  EquipmentHandling,
+  FilmAdditionHandling,
+  FilmHandling,
+  FlowHandling,
+  StepHandling,
+  WaferHandling,
+} from "./handling-inputs.ts";
 
 /**
  * What a flow is made of, complete in itself: names, values and provenance are copied in, so a stored assessment can be
  * read for ever without the library it came from. SI units; temperatures in K.
  *
- * Left out in this version: incoming shape other than films, patterned lines, wafers of a lot, tape and clock limits.
+ * What the handling rules ask beyond the physics stands in `handling-inputs.ts`.
+ *
+ * Left out in this version: incoming shape other than films, patterned lines, wafers of a lot.
  */
 
 export const STEP_KINDS = [
@@ -39,7 +52,7 @@ export const FILM_KINDS = ["metal", "polymer", "inorganic", "solder"] as const;
 export type FilmKind = (typeof FILM_KINDS)[number];
 
 /** A film material. `yieldStress` is that at 25 °C; only metals that yield have one. */
-export interface FilmInput {
+export interface FilmInput extends FilmHandling {
   id: string;
   name: string;
   kind: FilmKind;
@@ -51,7 +64,7 @@ export interface FilmInput {
 }
 
 /** A film put down by a step. `stress` at 25 °C on a full-thickness monitor held flat, tension positive. */
-export interface FilmAddition {
+export interface FilmAddition extends FilmAdditionHandling {
   side: Side;
   film: FilmInput;
   thickness: Measured;
@@ -64,7 +77,7 @@ export const CARRIER_MATERIALS = ["silicon", "glass"] as const;
 export type CarrierMaterial = (typeof CARRIER_MATERIALS)[number];
 
 /** A carrier. `expansion` null means silicon's own curve. */
-export interface CarrierInput {
+export interface CarrierInput extends CarrierHandling {
   id: string;
   name: string;
   material: CarrierMaterial;
@@ -90,7 +103,7 @@ export type ReleaseMethod = (typeof RELEASE_METHODS)[number];
  * pairs and far below the data sheet's. `softening` is the glass transition or softening point; `flows` is true for a
  * thermoplastic, which flows above it, false for a cross-linked material, which does not.
  */
-export interface BondingMaterialInput {
+export interface BondingMaterialInput extends BondingMaterialHandling {
   id: string;
   name: string;
   effectiveModulus: Measured;
@@ -109,7 +122,7 @@ export const PEAK_HOLDINGS = ["free", "held"] as const;
 export type PeakHolding = (typeof PEAK_HOLDINGS)[number];
 
 /** A tool with its two warp limits; null where the wafer comes on a frame and no limit is given. */
-export interface EquipmentInput {
+export interface EquipmentInput extends EquipmentHandling {
   id: string;
   name: string;
   warpLimitEdgesUp: Measured | null;
@@ -122,13 +135,13 @@ export interface EquipmentInput {
   largestDiameter: Measured;
 }
 
-export interface BondInput {
+export interface BondInput extends BondHandling {
   carrier: CarrierInput;
   material: BondingMaterialInput;
   thickness: Measured;
 }
 
-export interface StepInput {
+export interface StepInput extends StepHandling {
   kind: StepKind;
   title: string;
   peakTemperature: number;
@@ -147,8 +160,8 @@ export interface StepInput {
   groundFaceForce: Measured | null;
 }
 
-export interface FlowInput {
+export interface FlowInput extends FlowHandling {
   name: string;
-  wafer: { name: string; diameter: number; orientation: "100" | "111"; thickness: Measured };
+  wafer: { name: string; diameter: number; orientation: "100" | "111"; thickness: Measured } & WaferHandling;
   steps: StepInput[];
 }
