@@ -69,9 +69,44 @@ export const RULES = {
   },
   share: { label: "share", dimension: "fraction", range: { least: 0, most: 1, words: "0 to 100 %" } },
   holdTime: { label: "time at peak", dimension: "time", range: { least: 0, most: 2_592_000, words: "0 to 30 days" } },
+  featureHeight: {
+    label: "height",
+    dimension: "length",
+    range: { least: 0, most: 1e-3, words: "0 to 1 mm" },
+  },
+  embeddingDepth: {
+    label: "embedding layer of the tape",
+    dimension: "length",
+    range: { least: 0, most: 2e-3, words: "0 to 2 mm" },
+  },
+  peelForce: {
+    label: "peel force",
+    dimension: "forcePerLength",
+    range: { least: 0, most: 5000, words: "0 to 5000 N/m" },
+  },
+  timeOnTape: {
+    label: "time on tape",
+    dimension: "time",
+    range: { least: 0, most: 31_536_000, words: "0 to 365 days" },
+  },
+  bow: { label: "bow", dimension: "length", range: { least: -0.02, most: 0.02, words: "−20 mm to 20 mm" } },
+  warp: { label: "warp", dimension: "length", range: { least: 0, most: 0.02, words: "0 to 20 mm" } },
   faceForce: {
     label: "ground face force",
     dimension: "forcePerLength",
     range: { least: -5000, most: 5000, words: "−5000 N/m to 5000 N/m" },
   },
+  gap: { label: "gap", dimension: "length", range: { least: 0, most: 0.02, words: "0 to 20 mm" } },
+  pairThickness: {
+    label: "thickness",
+    dimension: "length",
+    range: { least: 1e-5, most: 0.02, words: "10 µm to 20 mm" },
+  },
+  weight: { label: "weight", dimension: "mass", range: { least: 1e-3, most: 10, words: "1 g to 10 kg" } },
+  bendRadius: {
+    label: "bend radius",
+    dimension: "length",
+    range: { least: 1e-4, most: 10, words: "0.1 mm to 10 m" },
+  },
+  exposureTime: { label: "time", dimension: "time", range: { least: 1, most: 2_592_000, words: "1 s to 30 days" } },
 } as const satisfies Record<string, QuantityRule>;

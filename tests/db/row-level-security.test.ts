@@ -15,7 +15,7 @@ const PROGRAM_TABLES = [
   "scan_file",
   "scan",
 ];
-const SITE_TABLES = ["film", "silicon", "carrier", "bonding_material", "equipment", "site_limit"];
+const SITE_TABLES = ["film", "silicon", "carrier", "carrier_unit", "bonding_material", "equipment", "site_limit"];
 
 let engineer: ActorScope;
 let technician: ActorScope;

@@ -5,14 +5,22 @@ import type { MeasuredText } from "#app/components/forms/MeasuredField.tsx";
 import { NoteField } from "#app/components/forms/NoteField.tsx";
 import { QuantityField } from "#app/components/forms/QuantityField.tsx";
 import { useRecordForm } from "#app/components/forms/use-record-form.ts";
+import { OptionalFields } from "#app/components/library/OptionalFields.tsx";
 import { measuredTexts } from "#app/components/library/property.ts";
 import { PropertyField } from "#app/components/library/PropertyField.tsx";
 import { RecordForm, type RecordFormProps } from "#app/components/library/RecordForm.tsx";
+import { SOLVENT_FAMILIES } from "#app/engine/flow/handling-inputs.ts";
 import { RELEASE_METHODS } from "#app/engine/flow/model.ts";
 import { quantityText } from "#app/lib/form-values.ts";
 import type { LibraryRecords } from "#app/schemas/library-records.ts";
-import { BONDING_MATERIAL_PROPERTIES as P } from "./bonding-material-properties.ts";
+import {
+  BOND_HEAT_PROPERTIES as HEAT,
+  BONDING_MATERIAL_PROPERTIES as P,
+  PEEL_PROPERTIES as PEEL,
+} from "./bonding-material-properties.ts";
 import { FormGroup } from "./FormGroup.tsx";
+import type { ResistanceName } from "./resistance-words.ts";
+import { ResistanceFields, type ResistanceText } from "./ResistanceFields.tsx";
 
 type BondingMaterial = LibraryRecords["bondingMaterial"];
 
@@ -27,8 +35,41 @@ type BondingMaterialFormValues = {
   solvent: string;
   acid: string;
   base: string;
+  handling: Record<ResistanceName, ResistanceText> & {
+    attackedBy: string[];
+    releaseLight: string;
+    remover: string;
+  } & Record<keyof typeof HEAT | keyof typeof PEEL, MeasuredText>;
   note: string;
 } & Record<keyof typeof P, MeasuredText>;
+
+const HEAT_FIELDS = Object.keys(HEAT) as (keyof typeof HEAT)[];
+const DEBOND_FIELDS = ["releaseLight", "remover", ...(Object.keys(PEEL) as (keyof typeof PEEL)[])] as const;
+
+/** Fields of a folded part, and whether something of it is given. */
+const folded = (names: readonly (keyof BondingMaterial["handling"])[], record: BondingMaterial | null) => ({
+  holds: names.map((name) => `handling.${name}`),
+  given: record !== null && names.some((name) => record.handling[name] !== null),
+});
+
+function handlingTexts(handling: BondingMaterial["handling"]): BondingMaterialFormValues["handling"] {
+  const resistance = (name: ResistanceName): ResistanceText => ({
+    word: handling[name]?.word ?? "",
+    longest: quantityText(handling[name]?.longest, "time", "min"),
+  });
+  return {
+    ...measuredTexts(handling, { ...HEAT, ...PEEL }),
+    vacuum: resistance("vacuum"),
+    plasma: resistance("plasma"),
+    solvent: resistance("solvent"),
+    acid: resistance("acid"),
+    base: resistance("base"),
+    ultraviolet: resistance("ultraviolet"),
+    attackedBy: handling.attackedBy,
+    releaseLight: handling.releaseLight ?? "",
+    remover: handling.remover ?? "",
+  };
+}
 
 const formValues = (material: BondingMaterial) => ({
   ...material,
@@ -36,6 +77,7 @@ const formValues = (material: BondingMaterial) => ({
   leastThickness: quantityText(material.leastThickness, "length", "µm"),
   mostThickness: quantityText(material.mostThickness, "length", "µm"),
   thermalCycles: material.thermalCycles === null ? "" : String(material.thermalCycles),
+  handling: handlingTexts(material.handling),
 });
 
 /** A bonding material with all its properties, each with tolerance and source. */
@@ -44,6 +86,7 @@ export function BondingMaterialForm({ record, ...rest }: RecordFormProps<Bonding
     lastResult: rest.lastResult,
     defaultValue: record ? formValues(record) : {},
   });
+  const handling = fields.handling.getFieldset();
   return (
     <RecordForm form={form} what="bonding material" {...rest}>
       <LineField field={fields.name} label="Name" />
@@ -74,20 +117,39 @@ export function BondingMaterialForm({ record, ...rest }: RecordFormProps<Bonding
       <PropertyField field={fields.poissonsRatio} of={P.poissonsRatio} />
       <PropertyField field={fields.expansionBelow} of={P.expansionBelow} />
       <PropertyField field={fields.expansionAbove} of={P.expansionAbove} />
-      <FormGroup label="What it stands">
+      <LineField
+        field={fields.thermalCycles}
+        label="Heatings between bond and debond"
+        hint="How many it stands; blank: not known"
+        input={{ inputMode: "numeric" }}
+        className="max-w-100"
+      />
+      <ResistanceFields handling={handling} says={fields} />
+      <OptionalFields label="In vacuum and heat" {...folded(HEAT_FIELDS, record)} lastResult={rest.lastResult}>
+        <PropertyField field={handling.vacuumTemperatureLimit} of={HEAT.vacuumTemperatureLimit} />
+        <PropertyField field={handling.weightLoss} of={HEAT.weightLoss} />
+        <PropertyField field={handling.limitTime} of={HEAT.limitTime} />
+        <PropertyField field={handling.thermalTime} of={HEAT.thermalTime} />
+      </OptionalFields>
+      <OptionalFields label="At the debond" {...folded(DEBOND_FIELDS, record)} lastResult={rest.lastResult}>
         <div className="grid gap-3 tablet:grid-cols-2">
-          <LineField field={fields.vacuum} label="Vacuum" hint="Up to which temperature, and its weight loss" />
-          <LineField field={fields.solvent} label="Solvent" hint="Which, and for how long" />
-          <LineField field={fields.acid} label="Acid" hint="Which, and for how long" />
-          <LineField field={fields.base} label="Base" hint="Which, and for how long" />
-          <LineField
-            field={fields.thermalCycles}
-            label="Thermal cycles"
-            hint="How many it stands; blank: not known"
-            input={{ inputMode: "numeric" }}
+          <ChoiceField
+            field={handling.releaseLight}
+            label="Light that lets it go"
+            choices={sameWords(["ultraviolet", "infrared"])}
+            blank="Not given"
+            hint="Blank: ultraviolet for a laser through glass"
+          />
+          <ChoiceField
+            field={handling.remover}
+            label="What takes its rest off afterwards"
+            choices={sameWords(SOLVENT_FAMILIES)}
+            blank="Not given"
           />
         </div>
-      </FormGroup>
+        <PropertyField field={handling.peelForce} of={PEEL.peelForce} />
+        <PropertyField field={handling.peelRadius} of={PEEL.peelRadius} />
+      </OptionalFields>
       <NoteField field={fields.note} label="Note" />
     </RecordForm>
   );

@@ -1,10 +1,12 @@
 import { InitialSchema } from "./2026-12-01-initial-schema.ts";
 import { RowLevelSecurity } from "./2026-12-01-row-level-security.ts";
 import { AssessmentDocumentNumber } from "./2026-12-02-assessment-document-number.ts";
+import { LibraryForRules } from "./2026-12-04-library-for-rules.ts";
 
 /** Every migration in the order in which it runs. */
 export const migrations = [
   { name: "2026-12-01-initial-schema", class: InitialSchema },
   { name: "2026-12-01-row-level-security", class: RowLevelSecurity },
   { name: "2026-12-02-assessment-document-number", class: AssessmentDocumentNumber },
+  { name: "2026-12-04-library-for-rules", class: LibraryForRules },
 ];

@@ -1,4 +1,6 @@
+import type { SolventFamily } from "#app/engine/flow/handling-inputs.ts";
 import type { CarrierMaterial, ReleaseMethod } from "#app/engine/flow/model.ts";
+import type { BondingMaterialHandlingValues } from "#app/schemas/library-handling.ts";
 
 /** Carriers of the invented pilot line: µm, mm, GPa, ppm/K (null: silicon's own curve), kg/m³, °C. */
 export interface DemoCarrier {
@@ -116,7 +118,18 @@ export interface DemoBondingMaterial {
   solvent: string;
   acid: string;
   base: string;
+  /** those words as the handling rules take them; weight loss that is only given as 'less than' stays out where a limit lies on it */
+  stands: Partial<Pick<BondingMaterialHandlingValues, "vacuum" | "solvent" | "acid" | "base">>;
+  attackedBy?: SolventFamily[];
+  /** °C */
+  vacuumLimit?: number;
+  /** fraction */
+  weightLoss?: number;
 }
+
+const RESISTS = { word: "resists" } as const;
+const ATTACKED = { word: "attacked" } as const;
+const MINUTE = 60;
 
 export const DEMO_BONDING_MATERIALS: DemoBondingMaterial[] = [
   {
@@ -139,6 +152,9 @@ export const DEMO_BONDING_MATERIALS: DemoBondingMaterial[] = [
     solvent: "dissolved by its remover",
     acid: "ok",
     base: "ok",
+    stands: { vacuum: RESISTS, solvent: RESISTS, acid: RESISTS, base: RESISTS },
+    attackedBy: ["bonding material remover"],
+    vacuumLimit: 180,
   },
   {
     name: "Laser-release adhesive B",
@@ -160,6 +176,9 @@ export const DEMO_BONDING_MATERIALS: DemoBondingMaterial[] = [
     solvent: "resists litho solvents",
     acid: "ok",
     base: "ok 30 min",
+    stands: { vacuum: RESISTS, solvent: RESISTS, acid: RESISTS, base: { ...RESISTS, longest: 30 * MINUTE } },
+    vacuumLimit: 250,
+    weightLoss: 0.003,
   },
   {
     name: "Peel adhesive C with release layer",
@@ -181,6 +200,9 @@ export const DEMO_BONDING_MATERIALS: DemoBondingMaterial[] = [
     solvent: "swells in hydrocarbon solvents",
     acid: "ok",
     base: "ok",
+    stands: { vacuum: RESISTS, solvent: RESISTS, acid: RESISTS, base: RESISTS },
+    attackedBy: ["hydrocarbon"],
+    vacuumLimit: 200,
   },
   {
     name: "Light-cured adhesive D",
@@ -202,6 +224,9 @@ export const DEMO_BONDING_MATERIALS: DemoBondingMaterial[] = [
     solvent: "swells in ketones",
     acid: "ok",
     base: "attacked > 10 min",
+    stands: { vacuum: RESISTS, solvent: RESISTS, acid: RESISTS, base: { ...ATTACKED, longest: 10 * MINUTE } },
+    attackedBy: ["ketone"],
+    vacuumLimit: 120,
   },
   {
     name: "Solvent-release adhesive E",
@@ -223,6 +248,8 @@ export const DEMO_BONDING_MATERIALS: DemoBondingMaterial[] = [
     solvent: "dissolves: no solvent step while bonded",
     acid: "ok",
     base: "ok",
+    stands: { vacuum: RESISTS, solvent: ATTACKED, acid: RESISTS, base: RESISTS },
+    vacuumLimit: 180,
   },
   {
     name: "Wax F",
@@ -244,5 +271,6 @@ export const DEMO_BONDING_MATERIALS: DemoBondingMaterial[] = [
     solvent: "dissolves",
     acid: "ok",
     base: "ok",
+    stands: { vacuum: ATTACKED, solvent: ATTACKED, acid: RESISTS, base: RESISTS },
   },
 ];

@@ -10,6 +10,12 @@ import type {
   FlowInput,
   StepInput,
 } from "#app/engine/flow/model.ts";
+import {
+  bondingMaterialHandlingOf,
+  carrierHandlingOf,
+  equipmentHandlingOf,
+  filmHandlingOf,
+} from "#app/lib/library-handling.ts";
 import type { FlowDetail, StepDetail } from "#app/schemas/flow-view.ts";
 
 /** Flows and library entities as the engine takes them: plain, with the columns that it knows. */
@@ -24,6 +30,7 @@ export function filmInput({ id, name, kind, ...film }: Film): FilmInput {
     expansion: film.expansion,
     yieldStress: film.yieldStress ?? null,
     temperatureLimit: film.temperatureLimit ?? null,
+    ...filmHandlingOf(film.handling),
   };
 }
 
@@ -38,6 +45,7 @@ export function carrierInput({ id, name, material, ...carrier }: Carrier): Carri
     poissonsRatio: carrier.poissonsRatio,
     expansion: carrier.expansion ?? null,
     temperatureLimit: carrier.temperatureLimit,
+    ...carrierHandlingOf(carrier),
   };
 }
 
@@ -55,6 +63,7 @@ export function bondingMaterialInput({ id, name, ...material }: BondingMaterial)
     temperatureLimit: material.temperatureLimit,
     release: material.release,
     releaseTemperature: material.releaseTemperature,
+    ...bondingMaterialHandlingOf(material),
   };
 }
 
@@ -67,6 +76,7 @@ export function equipmentInput({ id, name, ...tool }: Equipment): EquipmentInput
     leastUnsupportedThickness: tool.leastUnsupportedThickness ?? null,
     atPeak: tool.atPeak,
     largestDiameter: tool.largestDiameter,
+    ...equipmentHandlingOf(tool.handling),
   };
 }
 
@@ -91,8 +101,10 @@ function stepInputOf(step: StepDetail): StepInput {
     exposures: step.exposures,
     planned: step.planned,
     siliconAfter: step.siliconAfter,
-    adds: step.films.flatMap(({ change, side, film, thickness, stress, coverage }) =>
-      change === "adds" && thickness ? [{ side, film, thickness, stress, coverage }] : [],
+    adds: step.films.flatMap(({ change, side, film, thickness, stress, stressRecord, coverage }) =>
+      change === "adds" && thickness
+        ? [{ side, film, thickness, stress, coverage, ...(stressRecord ? { stressRecord } : {}) }]
+        : [],
     ),
     removes: step.films.flatMap(({ change, side, film }) =>
       change === "removes" ? [{ side, filmId: film.id, filmName: film.name }] : [],

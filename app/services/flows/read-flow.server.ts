@@ -8,6 +8,7 @@ import { notFound } from "#app/server/problem.server.ts";
 import type { ActorScope } from "#app/server/scope.server.ts";
 import { requireInProgram } from "../permission.server.ts";
 import { stampOf } from "../record.server.ts";
+import { stressRecordOf } from "#app/lib/library-handling.ts";
 import { bondingMaterialInput, carrierInput, equipmentInput, filmInput } from "./flow-inputs.ts";
 
 type LoadedFlow = Loaded<Flow, "program" | "silicon" | "updatedBy">;
@@ -92,6 +93,7 @@ function stepDetail(step: FlowStep, films: FlowStepFilm[]): StepDetail {
       thickness: film.thickness ?? null,
       ownStress: film.stress ?? null,
       stress: film.stress ?? film.film.stress,
+      stressRecord: film.stress ? null : stressRecordOf(film.film),
       coverage: film.coverage,
     })),
   };

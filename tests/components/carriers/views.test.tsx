@@ -5,6 +5,7 @@ import { LimitsTable } from "#app/components/carriers/LimitsTable.tsx";
 import { siliconView } from "#app/components/carriers/silicon-view.tsx";
 import { TemperatureBand } from "#app/components/carriers/TemperatureBand.tsx";
 import { toolView } from "#app/components/carriers/tool-view.tsx";
+import { BLANK_MATERIAL_HANDLING, BLANK_TOOL_HANDLING } from "#app/lib/blank-handling.ts";
 import type { LimitGroup } from "#app/lib/limit-rows.ts";
 import type { LibraryRecords } from "#app/schemas/library-records.ts";
 import { attributes, render, words } from "../drawings/render.ts";
@@ -38,6 +39,7 @@ const SLIDE: LibraryRecords["bondingMaterial"] = {
   solvent: "not known",
   acid: "not known",
   base: "not known",
+  handling: BLANK_MATERIAL_HANDLING,
 };
 const LASER = { ...SLIDE, flows: false, softening: stated(celsius(150)), temperatureLimit: stated(celsius(280)) };
 
@@ -109,6 +111,7 @@ describe("a tool", () => {
     warpLimitEdgesDown: stated(500e-6),
     leastUnsupportedThickness: stated(300e-6),
     largestDiameter: stated(0.3),
+    handling: BLANK_TOOL_HANDLING,
   };
 
   it("says the warp that it takes, edges up and edges down, and whether peak counts", () => {
