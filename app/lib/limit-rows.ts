@@ -26,3 +26,15 @@ export interface LimitGroup {
 export function isChanged({ value, delivered }: Pick<LimitRow, "value" | "delivered">): boolean {
   return Math.abs(value - delivered.value) > 1e-9 * Math.abs(delivered.value);
 }
+
+/** The limits that a reader's words are in, each with its rule; every word must be found in its title, its source or its rule's. */
+export function searchLimits(groups: LimitGroup[], query: string): LimitGroup[] {
+  const words = query.toLowerCase().split(/\s+/).filter(Boolean);
+  const fits = (group: LimitGroup) => (limit: LimitRow) => {
+    const text = `rule ${group.rule} ${group.title ?? ""} ${limit.title} ${limit.source}`.toLowerCase();
+    return words.every((word) => text.includes(word));
+  };
+  return groups
+    .map((group) => ({ ...group, limits: group.limits.filter(fits(group)) }))
+    .filter(({ limits }) => limits.length > 0);
+}

@@ -1,5 +1,6 @@
 import type { SolventFamily } from "#app/engine/flow/handling-inputs.ts";
 import type { CarrierMaterial, ReleaseMethod } from "#app/engine/flow/model.ts";
+import type { CarrierUnitState } from "#app/lib/carrier-units.ts";
 import type { BondingMaterialHandlingValues } from "#app/schemas/library-handling.ts";
 
 /** Carriers of the invented pilot line: µm, mm, GPa, ppm/K (null: silicon's own curve), kg/m³, °C. */
@@ -17,6 +18,15 @@ export interface DemoCarrier {
   perforated: boolean;
   limit: number;
   reuseLimit: number;
+  pieces?: DemoPiece[];
+}
+
+/** One piece of a carrier, by its mark. */
+interface DemoPiece {
+  mark: string;
+  uses: number;
+  state: CarrierUnitState;
+  lastUsedOn: string | null;
 }
 
 export const DEMO_CARRIERS: DemoCarrier[] = [
@@ -34,6 +44,10 @@ export const DEMO_CARRIERS: DemoCarrier[] = [
     perforated: false,
     limit: 400,
     reuseLimit: 50,
+    pieces: [
+      { mark: "S775-0102", uses: 31, state: "in use", lastUsedOn: "2026-11-20" },
+      { mark: "S775-0107", uses: 14, state: "cleaned", lastUsedOn: "2026-11-02" },
+    ],
   },
   {
     name: "Glass carrier 3.0 ppm",
@@ -49,6 +63,13 @@ export const DEMO_CARRIERS: DemoCarrier[] = [
     perforated: false,
     limit: 400,
     reuseLimit: 20,
+    pieces: [
+      { mark: "G30-0411", uses: 7, state: "in use", lastUsedOn: "2026-11-18" },
+      { mark: "G30-0412", uses: 12, state: "cleaned", lastUsedOn: "2026-11-09" },
+      { mark: "G30-0419", uses: 20, state: "cleaned", lastUsedOn: "2026-10-30" },
+      { mark: "G30-0427", uses: 20, state: "scrapped", lastUsedOn: "2026-10-12" },
+      { mark: "G30-0433", uses: 0, state: "cleaned", lastUsedOn: null },
+    ],
   },
   {
     name: "Glass carrier 3.3 ppm",

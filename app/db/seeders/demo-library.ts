@@ -1,6 +1,7 @@
 import type { EntityManager } from "@mikro-orm/postgresql";
 import { BLANK_CARRIER_HANDLING, BLANK_FILM_HANDLING, BLANK_MATERIAL_HANDLING } from "#app/lib/blank-handling.ts";
 import { BondingMaterial } from "../entities/bonding-material.ts";
+import { CarrierUnit } from "../entities/carrier-unit.ts";
 import { Carrier } from "../entities/carrier.ts";
 import { Film } from "../entities/film.ts";
 import { DEMO_BONDING_MATERIALS, DEMO_CARRIERS, type DemoBondingMaterial } from "./demo-bonding.ts";
@@ -49,7 +50,7 @@ export function addDemoLibrary(em: EntityManager): void {
   }
   for (const carrier of DEMO_CARRIERS) {
     const property = (value: number, tolerance: number | null) => measured(value, tolerance, "supplier");
-    em.create(Carrier, {
+    const kind = em.create(Carrier, {
       ...delivered(),
       name: carrier.name,
       material: carrier.material,
@@ -69,6 +70,7 @@ export function addDemoLibrary(em: EntityManager): void {
       reuseLimit: carrier.reuseLimit,
       handling: BLANK_CARRIER_HANDLING,
     });
+    for (const piece of carrier.pieces ?? []) em.create(CarrierUnit, { ...delivered(), carrier: kind, ...piece });
   }
   for (const material of DEMO_BONDING_MATERIALS) {
     const property = (value: number, tolerance: number | null) => measured(value, tolerance, "supplier");
