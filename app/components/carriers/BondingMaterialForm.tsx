@@ -5,6 +5,7 @@ import type { MeasuredText } from "#app/components/forms/MeasuredField.tsx";
 import { NoteField } from "#app/components/forms/NoteField.tsx";
 import { QuantityField } from "#app/components/forms/QuantityField.tsx";
 import { useRecordForm } from "#app/components/forms/use-record-form.ts";
+import { FormPart } from "#app/components/library/FormPart.tsx";
 import { OptionalFields } from "#app/components/library/OptionalFields.tsx";
 import { measuredTexts } from "#app/components/library/property.ts";
 import { PropertyField } from "#app/components/library/PropertyField.tsx";
@@ -90,66 +91,74 @@ export function BondingMaterialForm({ record, ...rest }: RecordFormProps<Bonding
   return (
     <RecordForm form={form} what="bonding material" {...rest}>
       <LineField field={fields.name} label="Name" />
-      <PropertyField field={fields.softening} of={P.softening} />
-      <CheckField
-        field={fields.flows}
-        label="Thermoplastic: it flows above that point. Not ticked: cross-linked, it stays coupled."
-      />
-      <PropertyField field={fields.temperatureLimit} of={P.temperatureLimit} />
-      <PropertyField field={fields.bondTemperature} of={P.bondTemperature} />
-      <ChoiceField
-        field={fields.release}
-        label="How it lets go"
-        choices={sameWords(RELEASE_METHODS)}
-        blank="Choose"
-        className="max-w-100"
-      />
-      <PropertyField field={fields.releaseTemperature} of={P.releaseTemperature} />
-      <FormGroup label="Thickness that it can be put on in">
-        <div className="grid max-w-100 grid-cols-2 gap-3">
-          <QuantityField field={fields.leastThickness} label="Least" dimension="length" example="10 µm" />
-          <QuantityField field={fields.mostThickness} label="Most" dimension="length" example="40 µm" />
-        </div>
-      </FormGroup>
-      <PropertyField field={fields.thicknessVariationShare} of={P.thicknessVariationShare} />
-      <PropertyField field={fields.effectiveModulus} of={P.effectiveModulus} />
-      <PropertyField field={fields.dataSheetModulus} of={P.dataSheetModulus} />
-      <PropertyField field={fields.poissonsRatio} of={P.poissonsRatio} />
-      <PropertyField field={fields.expansionBelow} of={P.expansionBelow} />
-      <PropertyField field={fields.expansionAbove} of={P.expansionAbove} />
-      <LineField
-        field={fields.thermalCycles}
-        label="Heatings between bond and debond"
-        hint="How many it stands; blank: not known"
-        input={{ inputMode: "numeric" }}
-        className="max-w-100"
-      />
-      <ResistanceFields handling={handling} says={fields} />
-      <OptionalFields label="In vacuum and heat" {...folded(HEAT_FIELDS, record)} lastResult={rest.lastResult}>
-        <PropertyField field={handling.vacuumTemperatureLimit} of={HEAT.vacuumTemperatureLimit} />
-        <PropertyField field={handling.weightLoss} of={HEAT.weightLoss} />
-        <PropertyField field={handling.limitTime} of={HEAT.limitTime} />
-        <PropertyField field={handling.thermalTime} of={HEAT.thermalTime} />
-      </OptionalFields>
-      <OptionalFields label="At the debond" {...folded(DEBOND_FIELDS, record)} lastResult={rest.lastResult}>
-        <div className="grid gap-3 tablet:grid-cols-2">
-          <ChoiceField
-            field={handling.releaseLight}
-            label="Light that lets it go"
-            choices={sameWords(["ultraviolet", "infrared"])}
-            blank="Not given"
-            hint="Blank: ultraviolet for a laser through glass"
-          />
-          <ChoiceField
-            field={handling.remover}
-            label="What takes its rest off afterwards"
-            choices={sameWords(SOLVENT_FAMILIES)}
-            blank="Not given"
-          />
-        </div>
-        <PropertyField field={handling.peelForce} of={PEEL.peelForce} />
-        <PropertyField field={handling.peelRadius} of={PEEL.peelRadius} />
-      </OptionalFields>
+      <FormPart title="In heat">
+        <PropertyField field={fields.softening} of={P.softening} />
+        <CheckField
+          field={fields.flows}
+          label="Thermoplastic: it flows above that point. Not ticked: cross-linked, it stays coupled."
+        />
+        <PropertyField field={fields.temperatureLimit} of={P.temperatureLimit} />
+        <PropertyField field={fields.bondTemperature} of={P.bondTemperature} />
+        <LineField
+          field={fields.thermalCycles}
+          label="Heatings between bond and debond"
+          hint="How many it stands; blank: not known"
+          input={{ inputMode: "numeric" }}
+          className="max-w-100"
+        />
+      </FormPart>
+      <FormPart title="Letting go">
+        <ChoiceField
+          field={fields.release}
+          label="How it lets go"
+          choices={sameWords(RELEASE_METHODS)}
+          blank="Choose"
+          className="max-w-100"
+        />
+        <PropertyField field={fields.releaseTemperature} of={P.releaseTemperature} />
+        <OptionalFields label="At the debond" {...folded(DEBOND_FIELDS, record)} lastResult={rest.lastResult}>
+          <div className="grid gap-3 tablet:grid-cols-2">
+            <ChoiceField
+              field={handling.releaseLight}
+              label="Light that lets it go"
+              choices={sameWords(["ultraviolet", "infrared"])}
+              blank="Not given"
+              hint="Blank: ultraviolet for a laser through glass"
+            />
+            <ChoiceField
+              field={handling.remover}
+              label="What takes its rest off afterwards"
+              choices={sameWords(SOLVENT_FAMILIES)}
+              blank="Not given"
+            />
+          </div>
+          <PropertyField field={handling.peelForce} of={PEEL.peelForce} />
+          <PropertyField field={handling.peelRadius} of={PEEL.peelRadius} />
+        </OptionalFields>
+      </FormPart>
+      <FormPart title="As a layer">
+        <FormGroup label="Thickness that it can be put on in">
+          <div className="grid max-w-100 grid-cols-2 gap-3">
+            <QuantityField field={fields.leastThickness} label="Least" dimension="length" example="10 µm" />
+            <QuantityField field={fields.mostThickness} label="Most" dimension="length" example="40 µm" />
+          </div>
+        </FormGroup>
+        <PropertyField field={fields.thicknessVariationShare} of={P.thicknessVariationShare} />
+        <PropertyField field={fields.effectiveModulus} of={P.effectiveModulus} />
+        <PropertyField field={fields.dataSheetModulus} of={P.dataSheetModulus} />
+        <PropertyField field={fields.poissonsRatio} of={P.poissonsRatio} />
+        <PropertyField field={fields.expansionBelow} of={P.expansionBelow} />
+        <PropertyField field={fields.expansionAbove} of={P.expansionAbove} />
+      </FormPart>
+      <FormPart title="In vacuum, chemicals and light">
+        <ResistanceFields handling={handling} says={fields} />
+        <OptionalFields label="In vacuum and heat" {...folded(HEAT_FIELDS, record)} lastResult={rest.lastResult}>
+          <PropertyField field={handling.vacuumTemperatureLimit} of={HEAT.vacuumTemperatureLimit} />
+          <PropertyField field={handling.weightLoss} of={HEAT.weightLoss} />
+          <PropertyField field={handling.limitTime} of={HEAT.limitTime} />
+          <PropertyField field={handling.thermalTime} of={HEAT.thermalTime} />
+        </OptionalFields>
+      </FormPart>
       <NoteField field={fields.note} label="Note" />
     </RecordForm>
   );

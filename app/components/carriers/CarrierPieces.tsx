@@ -25,7 +25,7 @@ interface Props {
 }
 
 const columnsOf = (limit: number, mayEdit: boolean): Column<CarrierUnitRow>[] => [
-  { key: "mark", head: "Mark", sortable: true, cell: ({ mark }) => mark },
+  { key: "mark", head: "Mark", sortable: true, cell: ({ mark }) => <span className="whitespace-nowrap">{mark}</span> },
   { key: "state", head: "State", sortable: true, cell: ({ state }) => state },
   { key: "uses", head: "Uses", numeric: true, sortable: true, cell: ({ uses }) => uses },
   { key: "left", head: "Left", wide: true, cell: (unit) => usesLeft(unit, limit) },

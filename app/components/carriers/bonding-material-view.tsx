@@ -1,3 +1,4 @@
+import { noBreak } from "#app/components/drawings/no-break.ts";
 import { SourceMark } from "#app/components/drawings/SourceMark.tsx";
 import { sameWords } from "#app/components/forms/ChoiceField.tsx";
 import type { RecordView } from "#app/components/library/LibraryDetail.tsx";
@@ -135,7 +136,7 @@ function handlingFacts(material: BondingMaterial): Fact[] {
       value: (
         <>
           {resistanceText(handling[name])}
-          {words && <SecondLine>{words}</SecondLine>}
+          {words && <SecondLine>{noBreak(words)}</SecondLine>}
         </>
       ),
     };

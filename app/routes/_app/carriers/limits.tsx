@@ -40,13 +40,18 @@ export default function Limits({ loaderData, actionData }: Route.ComponentProps)
   const { groups, mayEdit, editing, query } = loaderData;
   const all = groups.flatMap(({ limits }) => limits);
   const shown = searchLimits(groups, query);
+  const found = shown.reduce((sum, { limits }) => sum + limits.length, 0);
   const changed = all.filter(isChanged).length;
   return (
     <>
       <CarrierPlaces />
       <PageHead
         title="Limits"
-        remark={`${all.length} limits, ${changed === 0 ? "all" : all.length - changed} as delivered`}
+        remark={
+          query
+            ? `${found} of ${all.length} limits`
+            : `${all.length} limits, ${changed === 0 ? "all" : all.length - changed} as delivered`
+        }
       />
       <p className="mb-4 max-w-[60em] text-quiet">
         What the handling rules judge by. At a limit a step passes with caution; beyond it the step fails. Each is this
