@@ -45,7 +45,7 @@ test("a list is searched, filtered and sorted through its address", async ({ pag
   await page.getByRole("button", { name: "Show" }).click();
   await expect(page.getByRole("heading", { name: "No bonding material fits" })).toBeVisible();
   await page.goto("/carriers/tools?page=99");
-  await page.getByRole("link", { name: "First page" }).click();
+  await expect(page).not.toHaveURL(/page=99/);
   await expect(page.getByRole("link", { name: "Wafer bonder" })).toBeVisible();
 });
 

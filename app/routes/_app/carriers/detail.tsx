@@ -3,6 +3,7 @@ import { CarrierPieces } from "#app/components/carriers/CarrierPieces.tsx";
 import { KindDetail } from "#app/components/carriers/KindDetail.tsx";
 import { kindPath } from "#app/lib/library-kinds.ts";
 import { scopeOf } from "#app/server/contexts.server.ts";
+import { withinPages } from "#app/server/list-page.server.ts";
 import { notFound } from "#app/server/problem.server.ts";
 import { saveCarrierUnitForm } from "#app/services/library/carrier-unit-form.server.ts";
 import { getKindPage, requireKind } from "#app/services/library/kind-pages.server.ts";
@@ -14,7 +15,9 @@ export const meta: Route.MetaFunction = ({ loaderData }) => [
 ];
 
 export async function loader({ context, params, url }: Route.LoaderArgs) {
-  return getKindPage(scopeOf(context), requireKind(params.kind), params.recordId, url.searchParams);
+  const page = await getKindPage(scopeOf(context), requireKind(params.kind), params.recordId, url.searchParams);
+  if (page.units) withinPages(url, page.units.page);
+  return page;
 }
 
 /** Only carriers have pieces, and nothing else of a record is changed here. */
