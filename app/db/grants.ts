@@ -12,6 +12,7 @@ const READ_AND_WRITE = [
   "film",
   "silicon",
   "carrier",
+  "carrier_unit",
   "bonding_material",
   "equipment",
   "site_limit",

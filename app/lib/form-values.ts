@@ -24,3 +24,6 @@ export function measuredText(
     on: measured.on ?? "",
   };
 }
+
+/** An answer as the value of its choice; nothing when it was not given. */
+export const yesOrNoText = (answer: boolean | null): string => (answer === null ? "" : answer ? "yes" : "no");

@@ -1,5 +1,6 @@
 import type { LibraryRecords, LibraryUse } from "#app/schemas/library-records.ts";
 import type { RecordStamp } from "#app/schemas/record-stamp.ts";
+import type { CarrierUnits } from "./carrier-units.ts";
 import type { KIND_KEYS, KindSlug } from "./library-kinds.ts";
 import type { ListPage } from "./list-params.ts";
 import type { PairTrial } from "./pair-trial.ts";
@@ -34,4 +35,6 @@ export type KindPageData = KindRecordData & {
   site: SiteFacts;
   /** of a carrier */
   trial: PairTrial | null;
+  /** of a carrier */
+  units: CarrierUnits | null;
 };

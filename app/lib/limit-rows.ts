@@ -26,3 +26,24 @@ export interface LimitGroup {
 export function isChanged({ value, delivered }: Pick<LimitRow, "value" | "delivered">): boolean {
   return Math.abs(value - delivered.value) > 1e-9 * Math.abs(delivered.value);
 }
+
+/** 'rule 6' in a search means that rule and no other. */
+const RULE = /\brule\s+(\d+)\b/;
+
+/**
+ * The limits that a reader asks for: every word must be found in a limit's title, its source or its rule's title; 'rule 6' names
+ * a rule.
+ */
+export function searchLimits(groups: LimitGroup[], query: string): LimitGroup[] {
+  const asked = query.toLowerCase();
+  const rule = RULE.exec(asked)?.[1];
+  const words = asked.replace(RULE, " ").split(/\s+/).filter(Boolean);
+  const fits = (group: LimitGroup) => (limit: LimitRow) => {
+    const text = `${group.title ?? ""} ${limit.title} ${limit.source}`.toLowerCase();
+    return words.every((word) => text.includes(word));
+  };
+  return groups
+    .filter((group) => rule === undefined || group.rule === Number(rule))
+    .map((group) => ({ ...group, limits: group.limits.filter(fits(group)) }))
+    .filter(({ limits }) => limits.length > 0);
+}

@@ -1,6 +1,7 @@
 import { z } from "zod";
 import { RELEASE_METHODS } from "#app/engine/flow/model.ts";
 import { formatQuantity } from "#app/engine/units/format.ts";
+import { bondingMaterialHandling } from "./library-handling.ts";
 import { measured, optionalMeasured, quantity } from "./quantity.ts";
 import { RULES } from "./ranges.ts";
 import { checkbox, line, recordFields, wholeNumber } from "./record-fields.ts";
@@ -32,6 +33,7 @@ export const bondingMaterialSchema = z
     solvent: resistance,
     acid: resistance,
     base: resistance,
+    handling: bondingMaterialHandling,
   })
   .superRefine((material, context) => {
     const fail = (path: string[], message: string) => context.addIssue({ code: "custom", path, message });

@@ -1,5 +1,6 @@
 import { z } from "zod";
 import { CARRIER_MATERIALS } from "#app/engine/flow/model.ts";
+import { carrierHandling } from "./library-handling.ts";
 import { measured, optionalMeasured, quantity } from "./quantity.ts";
 import { RULES } from "./ranges.ts";
 import { checkbox, line, recordFields, wholeNumber } from "./record-fields.ts";
@@ -30,6 +31,7 @@ export const carrierSchema = z
     passesInfrared: checkbox,
     perforated: checkbox,
     reuseLimit: wholeNumber("Type how often it may be used, as a whole number.", { least: 1, most: 10_000 }),
+    handling: carrierHandling,
   })
   .superRefine(({ material, expansion, expansionRange, passesUltraviolet }, context) => {
     const fail = (path: string[], message: string) => context.addIssue({ code: "custom", path, message });

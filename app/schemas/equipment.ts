@@ -1,5 +1,6 @@
 import { z } from "zod";
 import { PEAK_HOLDINGS } from "#app/engine/flow/model.ts";
+import { equipmentHandling } from "./library-handling.ts";
 import { measured, optionalMeasured } from "./quantity.ts";
 import { RULES } from "./ranges.ts";
 import { recordFields } from "./record-fields.ts";
@@ -20,5 +21,6 @@ export const equipmentSchema = z.object({
     range: { least: 0, most: 2e-3, words: "0 to 2 mm" },
   }),
   largestDiameter: measured({ ...RULES.diameter, label: "largest diameter" }),
+  handling: equipmentHandling,
 });
 export type EquipmentValues = z.output<typeof equipmentSchema>;

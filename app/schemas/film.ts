@@ -1,5 +1,6 @@
 import { z } from "zod";
 import { FILM_KINDS } from "#app/engine/flow/model.ts";
+import { filmHandling } from "./library-handling.ts";
 import { measured, optionalMeasured } from "./quantity.ts";
 import { RULES } from "./ranges.ts";
 import { recordFields } from "./record-fields.ts";
@@ -19,5 +20,6 @@ export const filmSchema = z.object({
   expansion: measured(RULES.expansion),
   yieldStress: optionalMeasured(RULES.yieldStress),
   temperatureLimit: optionalMeasured({ ...RULES.temperature, toleranceDimension: "temperatureDifference" }),
+  handling: filmHandling,
 });
 export type FilmValues = z.output<typeof filmSchema>;

@@ -1,4 +1,4 @@
-import type { WaferKind } from "#app/engine/flow/handling-inputs.ts";
+import type { StressRecord, WaferKind } from "#app/engine/flow/handling-inputs.ts";
 import type {
   BondingMaterialInput,
   CarrierInput,
@@ -20,6 +20,8 @@ export interface StepFilmDetail {
   ownStress: Measured | null;
   /** own, else the film's */
   stress: Measured;
+  /** what the film's own stress was measured on; null for another stress, or when nothing of it is given */
+  stressRecord: StressRecord | null;
   coverage: number;
 }
 

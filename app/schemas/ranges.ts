@@ -96,4 +96,17 @@ export const RULES = {
     dimension: "forcePerLength",
     range: { least: -5000, most: 5000, words: "−5000 N/m to 5000 N/m" },
   },
+  gap: { label: "gap", dimension: "length", range: { least: 0, most: 0.02, words: "0 to 20 mm" } },
+  pairThickness: {
+    label: "thickness",
+    dimension: "length",
+    range: { least: 1e-5, most: 0.02, words: "10 µm to 20 mm" },
+  },
+  weight: { label: "weight", dimension: "mass", range: { least: 1e-3, most: 10, words: "1 g to 10 kg" } },
+  bendRadius: {
+    label: "bend radius",
+    dimension: "length",
+    range: { least: 1e-4, most: 10, words: "0.1 mm to 10 m" },
+  },
+  exposureTime: { label: "time", dimension: "time", range: { least: 1, most: 2_592_000, words: "1 s to 30 days" } },
 } as const satisfies Record<string, QuantityRule>;

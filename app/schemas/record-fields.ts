@@ -21,6 +21,16 @@ export const checkbox = z
   .optional()
   .transform((checked) => checked ?? false);
 
+/** A choice that may be left open, as null. */
+export const optionalChoice = <Word extends string>(words: readonly Word[]) =>
+  z
+    .union([z.enum(words as [Word, ...Word[]]), z.literal("")], "Choose one of the list.")
+    .optional()
+    .transform((word): Word | null => word || null);
+
+/** Yes, no, or not given, as null: a box to tick could not tell the last two apart. */
+export const yesOrNo = optionalChoice(["yes", "no"]).transform((word) => (word === null ? null : word === "yes"));
+
 /** A whole number from `least` to `most`; `message` says what to type instead of anything else. */
 export const wholeNumber = (message: string, { least, most }: { least: number; most: number }) =>
   z.number(message).int(message).min(least, `It must be ${least} or more.`).max(most, `It must be ${most} or less.`);

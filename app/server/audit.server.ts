@@ -29,6 +29,7 @@ const SUBJECTS: Record<string, string> = {
   Film: "film",
   Silicon: "silicon",
   Carrier: "carrier",
+  CarrierUnit: "carrier piece",
   BondingMaterial: "bonding material",
   Equipment: "equipment",
   SiteLimit: "limit",

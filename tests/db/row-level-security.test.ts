@@ -20,6 +20,7 @@ const SITE_TABLES = [
   "film",
   "silicon",
   "carrier",
+  "carrier_unit",
   "bonding_material",
   "equipment",
   "site_limit",

@@ -1,6 +1,7 @@
 import { expect, test } from "vitest";
 import { scopeOfPerson } from "#tests/db/people.ts";
 import { asOwner, useDatabase } from "#tests/db/test-database.ts";
+import { BLANK_FILM_HANDLING } from "#app/lib/blank-handling.ts";
 import { measured } from "#app/db/seeders/measured.ts";
 
 const database = useDatabase({ demo: true });
@@ -21,6 +22,7 @@ const newFilm = (name: string) => ({
     expansion: measured(40e-6, null, "supplier"),
     yieldStress: null,
     temperatureLimit: null,
+    handling: BLANK_FILM_HANDLING,
   },
 });
 

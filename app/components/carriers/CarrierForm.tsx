@@ -4,12 +4,13 @@ import { LineField } from "#app/components/forms/LineField.tsx";
 import type { MeasuredText } from "#app/components/forms/MeasuredField.tsx";
 import { NoteField } from "#app/components/forms/NoteField.tsx";
 import { QuantityField } from "#app/components/forms/QuantityField.tsx";
+import { YesNoField } from "#app/components/forms/YesNoField.tsx";
 import { useRecordForm } from "#app/components/forms/use-record-form.ts";
 import { measuredTexts } from "#app/components/library/property.ts";
 import { PropertyField } from "#app/components/library/PropertyField.tsx";
 import { RecordForm, type RecordFormProps } from "#app/components/library/RecordForm.tsx";
 import { CARRIER_MATERIALS } from "#app/engine/flow/model.ts";
-import { quantityText } from "#app/lib/form-values.ts";
+import { quantityText, yesOrNoText } from "#app/lib/form-values.ts";
 import type { LibraryRecords } from "#app/schemas/library-records.ts";
 import { CARRIER_PROPERTIES as P } from "./carrier-properties.ts";
 import { FormGroup } from "./FormGroup.tsx";
@@ -25,6 +26,7 @@ type CarrierFormValues = {
   passesInfrared: boolean;
   perforated: boolean;
   reuseLimit: string;
+  handling: Record<keyof Carrier["handling"], string>;
   note: string;
 } & Record<keyof typeof P, MeasuredText>;
 
@@ -34,6 +36,11 @@ const formValues = (carrier: Carrier) => ({
   diameter: quantityText(carrier.diameter, "length", "mm"),
   expansionRange: carrier.expansion === null ? "" : carrier.expansionRange,
   reuseLimit: String(carrier.reuseLimit),
+  handling: {
+    metalInLight: yesOrNoText(carrier.handling.metalInLight),
+    conductiveCoating: yesOrNoText(carrier.handling.conductiveCoating),
+    seenBySensors: yesOrNoText(carrier.handling.seenBySensors),
+  },
 });
 
 /** A carrier with all its properties, each with tolerance and source. */
@@ -42,6 +49,7 @@ export function CarrierForm({ record, ...rest }: RecordFormProps<Carrier>) {
     lastResult: rest.lastResult,
     defaultValue: record ? formValues(record) : {},
   });
+  const handling = fields.handling.getFieldset();
   return (
     <RecordForm form={form} what="carrier" {...rest}>
       <div className="grid gap-3 tablet:grid-cols-[2fr_1fr_1fr]">
@@ -71,6 +79,25 @@ export function CarrierForm({ record, ...rest }: RecordFormProps<Carrier>) {
             label="May be used, times"
             input={{ inputMode: "numeric" }}
             className="tablet:max-w-40 tablet:justify-self-end"
+          />
+        </div>
+      </FormGroup>
+      <FormGroup label="On tools and in the light that lets it go">
+        <div className="grid gap-3 tablet:grid-cols-3">
+          <YesNoField
+            field={handling.conductiveCoating}
+            label="Conductive coating"
+            hint="Of glass: an electrostatic chuck needs it"
+          />
+          <YesNoField
+            field={handling.seenBySensors}
+            label="Seen by optical sensors"
+            hint="Frosted, coated or with a ground rim"
+          />
+          <YesNoField
+            field={handling.metalInLight}
+            label="Metal or another opaque layer"
+            hint="In the way of the light that lets it go"
           />
         </div>
       </FormGroup>

@@ -55,3 +55,55 @@ export const BONDING_MATERIAL_PROPERTIES = {
     example: "5 %",
   },
 } as const satisfies Record<string, PropertyDescription>;
+
+/** What only the handling rules ask of it in vacuum and heat. */
+export const BOND_HEAT_PROPERTIES = {
+  vacuumTemperatureLimit: {
+    label: "Temperature limit in vacuum",
+    ask: "Highest temperature in vacuum, before it gives off gas",
+    dimension: "temperature",
+    unit: "°C",
+    example: "180 °C",
+    hint: "Blank: its temperature limit alone",
+  },
+  weightLoss: {
+    label: "Weight loss in vacuum",
+    ask: "Weight loss in vacuum at that temperature",
+    dimension: "fraction",
+    unit: "%",
+    example: "0.3 %",
+  },
+  limitTime: {
+    label: "Longest time at its limit",
+    ask: "Longest time at its temperature limit",
+    dimension: "time",
+    unit: "min",
+    example: "60 min",
+  },
+  thermalTime: {
+    label: "Total time hot",
+    ask: "Total time hot between bond and debond",
+    dimension: "time",
+    unit: "h",
+    example: "6 h",
+  },
+} as const satisfies Record<string, PropertyDescription>;
+
+/** What only the handling rules ask of it at a peel. */
+export const PEEL_PROPERTIES = {
+  peelForce: {
+    label: "Peel force per width",
+    ask: "Force per width at the peel front",
+    dimension: "forcePerLength",
+    unit: "N/m",
+    example: "40 N/m",
+    hint: "Blank: a peel over bumps is a caution",
+  },
+  peelRadius: {
+    label: "Bend radius at the peel front",
+    dimension: "length",
+    unit: "mm",
+    example: "60 mm",
+    hint: "Blank: a peel is a caution",
+  },
+} as const satisfies Record<string, PropertyDescription>;

@@ -1,14 +1,17 @@
+import { noBreak } from "#app/components/drawings/no-break.ts";
 import { SourceMark } from "#app/components/drawings/SourceMark.tsx";
 import { sameWords } from "#app/components/forms/ChoiceField.tsx";
 import type { RecordView } from "#app/components/library/LibraryDetail.tsx";
 import type { ListView } from "#app/components/library/LibraryList.tsx";
-import { propertyRows } from "#app/components/library/property.ts";
+import type { Fact } from "#app/components/library/Facts.tsx";
+import { givenRows, notGiven, propertyRows } from "#app/components/library/property.ts";
 import { RELEASE_METHODS } from "#app/engine/flow/model.ts";
 import { formatQuantity } from "#app/engine/units/format.ts";
 import { formatBare, formatMeasured } from "#app/lib/format-measured.ts";
 import { KINDS, kindPath } from "#app/lib/library-kinds.ts";
 import type { LibraryRecords } from "#app/schemas/library-records.ts";
-import { BONDING_MATERIAL_PROPERTIES } from "./bonding-material-properties.ts";
+import { BOND_HEAT_PROPERTIES, BONDING_MATERIAL_PROPERTIES, PEEL_PROPERTIES } from "./bonding-material-properties.ts";
+import { RESISTANCES, resistanceText } from "./resistance-words.ts";
 import { SecondLine } from "./SecondLine.tsx";
 import type { SiteFacts } from "#app/lib/kind-data.ts";
 
@@ -123,6 +126,34 @@ function meaning({ softening, flows }: BondingMaterial): string {
     : `Stays coupled above ${at}: it is cross-linked and does not flow.`;
 }
 
+/** What it does in each exposure, as the handling rules take it and as its data sheet says it; what they would do without. */
+function handlingFacts(material: BondingMaterial): Fact[] {
+  const { handling } = material;
+  const stands = RESISTANCES.map(({ name, label, says }): Fact => {
+    const words = says && material[says] !== "not known" ? material[says] : "";
+    return {
+      label,
+      value: (
+        <>
+          {resistanceText(handling[name])}
+          {words && <SecondLine>{noBreak(words)}</SecondLine>}
+        </>
+      ),
+    };
+  });
+  const missing = [
+    ...notGiven(handling, BOND_HEAT_PROPERTIES),
+    ...(material.release.includes("peel") ? notGiven(handling, PEEL_PROPERTIES) : []),
+  ];
+  return [
+    ...stands,
+    ...(handling.attackedBy.length > 0 ? [{ label: "Attacked by", value: handling.attackedBy.join(", ") }] : []),
+    ...(handling.releaseLight ? [{ label: "Light of release", value: handling.releaseLight }] : []),
+    ...(handling.remover ? [{ label: "Taken off with", value: handling.remover }] : []),
+    ...(missing.length > 0 ? [{ label: "Not given", value: missing.join(", ") }] : []),
+  ];
+}
+
 /** A bonding material: what its softening point means, up to where it is clear, and all its properties. */
 export function bondingMaterialView(material: BondingMaterial, site: SiteFacts): RecordView {
   const { effectiveModulus, dataSheetModulus, temperatureLimit } = material;
@@ -133,16 +164,16 @@ export function bondingMaterialView(material: BondingMaterial, site: SiteFacts):
   return {
     answer: meaning(material),
     because: `A step on it is clear below ${celsius(clearBelow(material, site))} and does not run beyond ${celsius(temperatureLimit.value)}. The locked-in modulus, ${modulus}, couples the pair${instead}.`,
-    properties: propertyRows(material, BONDING_MATERIAL_PROPERTIES),
+    properties: [
+      ...propertyRows(material, BONDING_MATERIAL_PROPERTIES),
+      ...givenRows(material.handling, { ...BOND_HEAT_PROPERTIES, ...PEEL_PROPERTIES }),
+    ],
     facts: [
       { label: "Class", value: material.flows ? "thermoplastic, flows" : "cross-linked" },
       { label: "Lets go by", value: material.release },
       { label: "Thickness", value: range(material) },
-      { label: "Thermal cycles", value: material.thermalCycles ?? "not known" },
-      { label: "Vacuum", value: material.vacuum },
-      { label: "Solvent", value: material.solvent },
-      { label: "Acid", value: material.acid },
-      { label: "Base", value: material.base },
+      { label: "Heatings it stands", value: material.thermalCycles ?? "not known" },
+      ...handlingFacts(material),
     ],
   };
 }

@@ -19,6 +19,8 @@ function passes({ passesUltraviolet, passesInfrared }: Carrier): string {
   return light.join(", ") || "none";
 }
 
+const yesOrNo = (answer: boolean | null) => (answer === null ? "not given" : answer ? "yes" : "no");
+
 const times = (count: number) => (count === 1 ? "once" : `${count} times`);
 
 export const CARRIER_LIST: ListView<Carrier> = {
@@ -130,6 +132,9 @@ export function carrierView(carrier: Carrier): RecordView {
       { label: "Passes light", value: passes(carrier) },
       { label: "Perforated", value: carrier.perforated ? "yes, for solvent" : "no" },
       { label: "May be used", value: times(carrier.reuseLimit) },
+      { label: "Conductive coating", value: yesOrNo(carrier.handling.conductiveCoating) },
+      { label: "Seen by sensors", value: yesOrNo(carrier.handling.seenBySensors) },
+      { label: "Opaque layer", value: yesOrNo(carrier.handling.metalInLight) },
     ],
   };
 }

@@ -36,3 +36,37 @@ export const TOOL_PROPERTIES = {
     example: "300 mm",
   },
 } as const satisfies Record<string, PropertyDescription>;
+
+/** What only the handling rules ask of a tool. */
+export const TOOL_HANDLING_PROPERTIES = {
+  sealGap: {
+    label: "Gap that its seal closes",
+    ask: "Gap under the wafer that its vacuum seal still closes",
+    dimension: "length",
+    unit: "mm",
+    example: "1 mm",
+    hint: "Blank: the site’s limit for its seal",
+  },
+  slotClearance: {
+    label: "Clearance in a slot",
+    ask: "Clear height over and under what lies in a slot",
+    dimension: "length",
+    unit: "mm",
+    example: "3 mm",
+    hint: "Blank: in a store the site’s limit",
+  },
+  weightLimit: {
+    label: "Weight limit",
+    ask: "Heaviest that its robot takes",
+    dimension: "mass",
+    unit: "g",
+    example: "300 g",
+  },
+  totalThicknessLimit: {
+    label: "Thickness limit",
+    ask: "Thickest that its robot and aligner take, wafer and carrier together",
+    dimension: "length",
+    unit: "mm",
+    example: "1.8 mm",
+  },
+} as const satisfies Record<string, PropertyDescription>;

@@ -1,14 +1,15 @@
 import { SourceMark } from "#app/components/drawings/SourceMark.tsx";
 import type { RecordView } from "#app/components/library/LibraryDetail.tsx";
 import type { ListView } from "#app/components/library/LibraryList.tsx";
-import { propertyRows } from "#app/components/library/property.ts";
+import type { Fact } from "#app/components/library/Facts.tsx";
+import { givenRows, notGiven, propertyRows } from "#app/components/library/property.ts";
 import type { Measured } from "#app/engine/measured.ts";
 import { formatQuantity } from "#app/engine/units/format.ts";
 import { formatBare, formatMeasured } from "#app/lib/format-measured.ts";
 import { KINDS, kindPath } from "#app/lib/library-kinds.ts";
 import type { LibraryRecords } from "#app/schemas/library-records.ts";
 import { SecondLine } from "./SecondLine.tsx";
-import { TOOL_PROPERTIES } from "./tool-properties.ts";
+import { TOOL_HANDLING_PROPERTIES, TOOL_PROPERTIES } from "./tool-properties.ts";
 
 type Tool = LibraryRecords["equipment"];
 
@@ -110,15 +111,33 @@ function unsupported({ leastUnsupportedThickness: least }: Tool): string {
     : ` Without support it takes silicon from ${micrometres(least.value)} up.`;
 }
 
+/** What the handling rules take it as, and what of it they would have to do without. */
+function handlingFacts({ handling }: Tool): Fact[] {
+  const { clamping, seal, contactFace, contactMeans, sensesOptically, ioniser } = handling;
+  const yesOrNo = (answer: boolean) => (answer ? "yes" : "no");
+  const missing = notGiven(handling, TOOL_HANDLING_PROPERTIES);
+  return [
+    { label: "Clamps by", value: clamping ?? "not given" },
+    ...(seal ? [{ label: "Vacuum seal", value: seal }] : []),
+    ...(contactFace && contactMeans
+      ? [{ label: "Touches", value: `${contactFace === "front" ? "device side" : "back side"}, ${contactMeans}` }]
+      : []),
+    ...(sensesOptically === null ? [] : [{ label: "Finds it by light", value: yesOrNo(sensesOptically) }]),
+    ...(ioniser === null ? [] : [{ label: "Ioniser", value: yesOrNo(ioniser) }]),
+    ...(missing.length > 0 ? [{ label: "Not given", value: missing.join(", ") }] : []),
+  ];
+}
+
 /** A tool: the warp that it takes, and what is judged while the wafer is hot. */
 export function toolView(tool: Tool): RecordView {
   return {
     answer: takes(tool),
     because: whenHot(tool) + unsupported(tool),
-    properties: propertyRows(tool, TOOL_PROPERTIES),
+    properties: [...propertyRows(tool, TOOL_PROPERTIES), ...givenRows(tool.handling, TOOL_HANDLING_PROPERTIES)],
     facts: [
       { label: "Holds by", value: tool.holding },
       { label: "When hot", value: tool.atPeak },
+      ...handlingFacts(tool),
     ],
   };
 }

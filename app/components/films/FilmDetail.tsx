@@ -1,10 +1,10 @@
 import { Link } from "react-router";
 import { LibraryDetail } from "#app/components/library/LibraryDetail.tsx";
-import { propertyRows } from "#app/components/library/property.ts";
+import { givenRows, propertyRows } from "#app/components/library/property.ts";
 import type { LibraryRecords, LibraryUse } from "#app/schemas/library-records.ts";
 import type { RecordStamp } from "#app/schemas/record-stamp.ts";
-import { FILM_PROPERTIES } from "./film-properties.ts";
-import { filmAnswer, filmHistory } from "./film-words.ts";
+import { FILM_HANDLING_PROPERTIES, FILM_PROPERTIES } from "./film-properties.ts";
+import { filmAnswer, filmHistory, measuredOn } from "./film-words.ts";
 
 interface Props {
   record: LibraryRecords["film"];
@@ -25,10 +25,11 @@ export function FilmDetail(props: Props) {
       view={{
         answer: filmAnswer(record),
         because: filmHistory(record),
-        properties: propertyRows(record, FILM_PROPERTIES),
+        properties: [...propertyRows(record, FILM_PROPERTIES), ...givenRows(record.handling, FILM_HANDLING_PROPERTIES)],
         facts: [
           { label: "Kind", value: record.kind },
           { label: "State of the stress", value: record.stressState || "not given" },
+          { label: "Stress measured on", value: measuredOn(record.handling) },
         ],
       }}
     >

@@ -30,3 +30,15 @@ export const FILM_PROPERTIES = {
     example: "350 °C",
   },
 } as const satisfies Record<string, PropertyDescription>;
+
+/** What only the handling rules ask of a film. */
+export const FILM_HANDLING_PROPERTIES = {
+  solderMelting: {
+    label: "Its solder melts at",
+    ask: "Temperature at which the solder of this film melts",
+    dimension: "temperature",
+    unit: "°C",
+    example: "221 °C",
+    hint: "Blank: no solder, or its temperature limit",
+  },
+} as const satisfies Record<string, PropertyDescription>;

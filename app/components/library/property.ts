@@ -48,6 +48,24 @@ export function measuredTexts<Name extends string>(
   return Object.fromEntries(texts) as Record<Name, MeasuredText>;
 }
 
+/** The rows of those that are given, of properties that few records have. */
+export function givenRows<Name extends string>(
+  record: Record<NoInfer<Name>, Measured | null>,
+  described: PropertyDescriptions<Name>,
+): Property[] {
+  return propertyRows(record, described).filter(({ measured }) => measured !== null);
+}
+
+/** What none is given of, in the words of the table: 'peel force, bend radius at the peel front'; empty when all are. */
+export function notGiven<Name extends string>(
+  record: Record<NoInfer<Name>, Measured | null>,
+  described: PropertyDescriptions<Name>,
+): string[] {
+  return entries(described).flatMap(([name, { label }]) =>
+    record[name] === null ? [label.charAt(0).toLowerCase() + label.slice(1)] : [],
+  );
+}
+
 /** The measured properties of a record as rows of its property table, in the order of their descriptions. */
 export function propertyRows<Name extends string>(
   record: Record<NoInfer<Name>, Measured | null>,

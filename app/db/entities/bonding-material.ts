@@ -1,6 +1,7 @@
 import { defineEntity, p, type InferEntity } from "@mikro-orm/core";
 import type { ReleaseMethod } from "#app/engine/flow/model.ts";
 import type { Measured } from "#app/engine/measured.ts";
+import type { BondingMaterialHandlingValues } from "#app/schemas/library-handling.ts";
 import { recordProperties } from "./record.ts";
 
 /** A temporary bonding material with the way it lets go. */
@@ -34,6 +35,8 @@ export const BondingMaterial = defineEntity({
     solvent: p.text(),
     acid: p.text(),
     base: p.text(),
+    /** what only the handling rules ask */
+    handling: p.json<BondingMaterialHandlingValues>(),
     ...recordProperties,
   },
 });

@@ -1,6 +1,7 @@
 import { defineEntity, p, type InferEntity } from "@mikro-orm/core";
 import type { CarrierMaterial } from "#app/engine/flow/model.ts";
 import type { Measured } from "#app/engine/measured.ts";
+import type { CarrierHandlingValues } from "#app/schemas/library-handling.ts";
 import { recordProperties } from "./record.ts";
 
 /** A kind of carrier wafer. */
@@ -27,6 +28,8 @@ export const Carrier = defineEntity({
     passesInfrared: p.boolean(),
     perforated: p.boolean(),
     reuseLimit: p.integer(),
+    /** what only the handling rules ask */
+    handling: p.json<CarrierHandlingValues>(),
     ...recordProperties,
   },
 });

@@ -2,6 +2,7 @@ import { Assessment } from "./assessment.ts";
 import { AuditEvent } from "./audit-event.ts";
 import { BondingMaterial } from "./bonding-material.ts";
 import { Carrier } from "./carrier.ts";
+import { CarrierUnit } from "./carrier-unit.ts";
 import { Credential } from "./credential.ts";
 import { Equipment } from "./equipment.ts";
 import { Film } from "./film.ts";
@@ -32,6 +33,7 @@ export const entities = [
   Film,
   Silicon,
   Carrier,
+  CarrierUnit,
   BondingMaterial,
   Equipment,
   SiteLimit,

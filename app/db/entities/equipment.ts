@@ -1,6 +1,7 @@
 import { defineEntity, p, type InferEntity } from "@mikro-orm/core";
 import type { PeakHolding } from "#app/engine/flow/model.ts";
 import type { Measured } from "#app/engine/measured.ts";
+import type { EquipmentHandlingValues } from "#app/schemas/library-handling.ts";
 import { recordProperties } from "./record.ts";
 
 /** A class of tool with the warp it takes. */
@@ -18,6 +19,8 @@ export const Equipment = defineEntity({
     warpLimitEdgesDown: p.json<Measured>().nullable(),
     leastUnsupportedThickness: p.json<Measured>().nullable(),
     largestDiameter: p.json<Measured>(),
+    /** what only the handling rules ask */
+    handling: p.json<EquipmentHandlingValues>(),
     ...recordProperties,
   },
 });

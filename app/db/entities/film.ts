@@ -1,6 +1,7 @@
 import { defineEntity, p, type InferEntity } from "@mikro-orm/core";
 import type { FilmKind } from "#app/engine/flow/model.ts";
 import type { Measured } from "#app/engine/measured.ts";
+import type { FilmHandlingValues } from "#app/schemas/library-handling.ts";
 import { recordProperties } from "./record.ts";
 
 /** A film of the site's library; SI values, each with its own provenance. */
@@ -22,6 +23,8 @@ export const Film = defineEntity({
     /** at 25 °C, Pa; only for metals that yield */
     yieldStress: p.json<Measured>().nullable(),
     temperatureLimit: p.json<Measured>().nullable(),
+    /** what only the handling rules ask */
+    handling: p.json<FilmHandlingValues>(),
     ...recordProperties,
   },
 });

@@ -3,6 +3,7 @@ import { RowLevelSecurity } from "./2026-12-01-row-level-security.ts";
 import { AssessmentDocumentNumber } from "./2026-12-02-assessment-document-number.ts";
 import { FlowHandling } from "./2026-12-03-flow-handling.ts";
 import { FlowRevisionsAndTemplates } from "./2026-12-03-flow-revisions-and-templates.ts";
+import { LibraryForRules } from "./2026-12-04-library-for-rules.ts";
 
 /** Every migration in the order in which it runs. */
 export const migrations = [
@@ -11,4 +12,5 @@ export const migrations = [
   { name: "2026-12-02-assessment-document-number", class: AssessmentDocumentNumber },
   { name: "2026-12-03-flow-revisions-and-templates", class: FlowRevisionsAndTemplates },
   { name: "2026-12-03-flow-handling", class: FlowHandling },
+  { name: "2026-12-04-library-for-rules", class: LibraryForRules },
 ];

@@ -1,4 +1,7 @@
+import type { SolventFamily } from "#app/engine/flow/handling-inputs.ts";
 import type { CarrierMaterial, ReleaseMethod } from "#app/engine/flow/model.ts";
+import type { CarrierUnitState } from "#app/lib/carrier-units.ts";
+import type { BondingMaterialHandlingValues } from "#app/schemas/library-handling.ts";
 
 /** Carriers of the invented pilot line: µm, mm, GPa, ppm/K (null: silicon's own curve), kg/m³, °C. */
 export interface DemoCarrier {
@@ -15,6 +18,15 @@ export interface DemoCarrier {
   perforated: boolean;
   limit: number;
   reuseLimit: number;
+  pieces?: DemoPiece[];
+}
+
+/** One piece of a carrier, by its mark. */
+interface DemoPiece {
+  mark: string;
+  uses: number;
+  state: CarrierUnitState;
+  lastUsedOn: string | null;
 }
 
 export const DEMO_CARRIERS: DemoCarrier[] = [
@@ -32,6 +44,10 @@ export const DEMO_CARRIERS: DemoCarrier[] = [
     perforated: false,
     limit: 400,
     reuseLimit: 50,
+    pieces: [
+      { mark: "S775-0102", uses: 31, state: "in use", lastUsedOn: "2026-11-20" },
+      { mark: "S775-0107", uses: 14, state: "cleaned", lastUsedOn: "2026-11-02" },
+    ],
   },
   {
     name: "Glass carrier 3.0 ppm",
@@ -47,6 +63,13 @@ export const DEMO_CARRIERS: DemoCarrier[] = [
     perforated: false,
     limit: 400,
     reuseLimit: 20,
+    pieces: [
+      { mark: "G30-0411", uses: 7, state: "in use", lastUsedOn: "2026-11-18" },
+      { mark: "G30-0412", uses: 12, state: "cleaned", lastUsedOn: "2026-11-09" },
+      { mark: "G30-0419", uses: 20, state: "cleaned", lastUsedOn: "2026-10-30" },
+      { mark: "G30-0427", uses: 20, state: "scrapped", lastUsedOn: "2026-10-12" },
+      { mark: "G30-0433", uses: 0, state: "cleaned", lastUsedOn: null },
+    ],
   },
   {
     name: "Glass carrier 3.3 ppm",
@@ -116,7 +139,18 @@ export interface DemoBondingMaterial {
   solvent: string;
   acid: string;
   base: string;
+  /** those words as the handling rules take them; weight loss that is only given as 'less than' stays out where a limit lies on it */
+  stands: Partial<Pick<BondingMaterialHandlingValues, "vacuum" | "solvent" | "acid" | "base">>;
+  attackedBy?: SolventFamily[];
+  /** °C */
+  vacuumLimit?: number;
+  /** fraction */
+  weightLoss?: number;
 }
+
+const RESISTS = { word: "resists" } as const;
+const ATTACKED = { word: "attacked" } as const;
+const MINUTE = 60;
 
 export const DEMO_BONDING_MATERIALS: DemoBondingMaterial[] = [
   {
@@ -139,6 +173,9 @@ export const DEMO_BONDING_MATERIALS: DemoBondingMaterial[] = [
     solvent: "dissolved by its remover",
     acid: "ok",
     base: "ok",
+    stands: { vacuum: RESISTS, solvent: RESISTS, acid: RESISTS, base: RESISTS },
+    attackedBy: ["bonding material remover"],
+    vacuumLimit: 180,
   },
   {
     name: "Laser-release adhesive B",
@@ -160,6 +197,9 @@ export const DEMO_BONDING_MATERIALS: DemoBondingMaterial[] = [
     solvent: "resists litho solvents",
     acid: "ok",
     base: "ok 30 min",
+    stands: { vacuum: RESISTS, solvent: RESISTS, acid: RESISTS, base: { ...RESISTS, longest: 30 * MINUTE } },
+    vacuumLimit: 250,
+    weightLoss: 0.003,
   },
   {
     name: "Peel adhesive C with release layer",
@@ -181,6 +221,9 @@ export const DEMO_BONDING_MATERIALS: DemoBondingMaterial[] = [
     solvent: "swells in hydrocarbon solvents",
     acid: "ok",
     base: "ok",
+    stands: { vacuum: RESISTS, solvent: RESISTS, acid: RESISTS, base: RESISTS },
+    attackedBy: ["hydrocarbon"],
+    vacuumLimit: 200,
   },
   {
     name: "Light-cured adhesive D",
@@ -202,6 +245,9 @@ export const DEMO_BONDING_MATERIALS: DemoBondingMaterial[] = [
     solvent: "swells in ketones",
     acid: "ok",
     base: "attacked > 10 min",
+    stands: { vacuum: RESISTS, solvent: RESISTS, acid: RESISTS, base: { ...ATTACKED, longest: 10 * MINUTE } },
+    attackedBy: ["ketone"],
+    vacuumLimit: 120,
   },
   {
     name: "Solvent-release adhesive E",
@@ -223,6 +269,8 @@ export const DEMO_BONDING_MATERIALS: DemoBondingMaterial[] = [
     solvent: "dissolves: no solvent step while bonded",
     acid: "ok",
     base: "ok",
+    stands: { vacuum: RESISTS, solvent: ATTACKED, acid: RESISTS, base: RESISTS },
+    vacuumLimit: 180,
   },
   {
     name: "Wax F",
@@ -244,5 +292,6 @@ export const DEMO_BONDING_MATERIALS: DemoBondingMaterial[] = [
     solvent: "dissolves",
     acid: "ok",
     base: "ok",
+    stands: { vacuum: ATTACKED, solvent: ATTACKED, acid: RESISTS, base: RESISTS },
   },
 ];

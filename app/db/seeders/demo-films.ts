@@ -13,6 +13,8 @@ export interface DemoFilm {
   expansion: number;
   yieldStress: number | null;
   limit: number;
+  /** melting of the solder on it, where its limit is not that already */
+  melting?: number;
   source: SourceKind;
   note: string;
 }
@@ -127,6 +129,7 @@ export const DEMO_FILMS: DemoFilm[] = [
     expansion: 16.7,
     yieldStress: 200,
     limit: 221,
+    melting: 221,
     source: "assumed",
     note: "",
   },

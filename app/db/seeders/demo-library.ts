@@ -1,13 +1,28 @@
 import type { EntityManager } from "@mikro-orm/postgresql";
+import { BLANK_CARRIER_HANDLING, BLANK_FILM_HANDLING, BLANK_MATERIAL_HANDLING } from "#app/lib/blank-handling.ts";
 import { BondingMaterial } from "../entities/bonding-material.ts";
+import { CarrierUnit } from "../entities/carrier-unit.ts";
 import { Carrier } from "../entities/carrier.ts";
 import { Film } from "../entities/film.ts";
-import { DEMO_BONDING_MATERIALS, DEMO_CARRIERS } from "./demo-bonding.ts";
+import { DEMO_BONDING_MATERIALS, DEMO_CARRIERS, type DemoBondingMaterial } from "./demo-bonding.ts";
 import { DEMO_FILMS } from "./demo-films.ts";
 import { celsius, measured } from "./measured.ts";
 import { delivered } from "./reference-seeder.ts";
 
 const MEASURED_ON = "2026-10-21";
+
+/** What its data sheet says of chemicals and vacuum, as the handling rules take it. */
+function handlingOf({ stands, attackedBy = [], vacuumLimit, weightLoss }: DemoBondingMaterial) {
+  const sheet = (value: number | undefined) =>
+    value === undefined ? null : measured(value, null, "supplier", "data sheet");
+  return {
+    ...BLANK_MATERIAL_HANDLING,
+    ...stands,
+    attackedBy,
+    vacuumTemperatureLimit: sheet(vacuumLimit === undefined ? undefined : celsius(vacuumLimit)),
+    weightLoss: sheet(weightLoss),
+  };
+}
 
 /** Films, carriers and bonding materials of the invented pilot line. */
 export function addDemoLibrary(em: EntityManager): void {
@@ -27,11 +42,15 @@ export function addDemoLibrary(em: EntityManager): void {
       expansion: property(film.expansion * 1e-6, film.expansion * 0.03 * 1e-6),
       yieldStress: film.yieldStress === null ? null : property(film.yieldStress * 1e6, film.yieldStress * 0.1 * 1e6),
       temperatureLimit: property(celsius(film.limit), null),
+      handling: {
+        ...BLANK_FILM_HANDLING,
+        solderMelting: film.melting === undefined ? null : property(celsius(film.melting), null),
+      },
     });
   }
   for (const carrier of DEMO_CARRIERS) {
     const property = (value: number, tolerance: number | null) => measured(value, tolerance, "supplier");
-    em.create(Carrier, {
+    const kind = em.create(Carrier, {
       ...delivered(),
       name: carrier.name,
       material: carrier.material,
@@ -49,7 +68,9 @@ export function addDemoLibrary(em: EntityManager): void {
       passesInfrared: true,
       perforated: carrier.perforated,
       reuseLimit: carrier.reuseLimit,
+      handling: BLANK_CARRIER_HANDLING,
     });
+    for (const piece of carrier.pieces ?? []) em.create(CarrierUnit, { ...delivered(), carrier: kind, ...piece });
   }
   for (const material of DEMO_BONDING_MATERIALS) {
     const property = (value: number, tolerance: number | null) => measured(value, tolerance, "supplier");
@@ -81,6 +102,7 @@ export function addDemoLibrary(em: EntityManager): void {
       solvent: material.solvent,
       acid: material.acid,
       base: material.base,
+      handling: handlingOf(material),
     });
   }
 }

@@ -1,9 +1,12 @@
+import type { Clamping } from "#app/engine/flow/handling-inputs.ts";
 import type { PeakHolding } from "#app/engine/flow/model.ts";
 
 /** Classes of tool with the warp they take: lengths in µm, null where the wafer comes on a frame and no limit is given. */
 export interface ReferenceTool {
   name: string;
   holding: string;
+  /** as the handling rules take it; a chuck that may be one of two is taken as the gentler, a clamp ring */
+  clamping: Clamping | null;
   atPeak: PeakHolding;
   edgesUp: number | null;
   edgesDown: number | null;
@@ -16,6 +19,7 @@ export const REFERENCE_EQUIPMENT: ReferenceTool[] = [
   {
     name: "Cassette or box store 200 mm",
     holding: "free",
+    clamping: "ledges",
     atPeak: "free",
     edgesUp: 1000,
     edgesDown: 1000,
@@ -25,6 +29,7 @@ export const REFERENCE_EQUIPMENT: ReferenceTool[] = [
   {
     name: "Cassette or box store 300 mm",
     holding: "free",
+    clamping: "ledges",
     atPeak: "free",
     edgesUp: 2000,
     edgesDown: 2000,
@@ -34,6 +39,7 @@ export const REFERENCE_EQUIPMENT: ReferenceTool[] = [
   {
     name: "Interferometer or profilometer",
     holding: "free",
+    clamping: null,
     atPeak: "free",
     edgesUp: 1000,
     edgesDown: 1000,
@@ -43,6 +49,7 @@ export const REFERENCE_EQUIPMENT: ReferenceTool[] = [
   {
     name: "Coat and develop track",
     holding: "free on proximity pins",
+    clamping: "pins",
     atPeak: "free",
     edgesUp: 400,
     edgesDown: 500,
@@ -52,6 +59,7 @@ export const REFERENCE_EQUIPMENT: ReferenceTool[] = [
   {
     name: "Mask aligner or stepper",
     holding: "vacuum",
+    clamping: "vacuum",
     atPeak: "held",
     edgesUp: 200,
     edgesDown: 300,
@@ -61,6 +69,7 @@ export const REFERENCE_EQUIPMENT: ReferenceTool[] = [
   {
     name: "Polymer cure oven",
     holding: "free in boat",
+    clamping: "boat",
     atPeak: "free",
     edgesUp: 1500,
     edgesDown: 1500,
@@ -70,6 +79,7 @@ export const REFERENCE_EQUIPMENT: ReferenceTool[] = [
   {
     name: "Sputter, electrostatic or clamp chuck",
     holding: "clamped",
+    clamping: "clamp ring",
     atPeak: "held",
     edgesUp: 400,
     edgesDown: 400,
@@ -79,6 +89,7 @@ export const REFERENCE_EQUIPMENT: ReferenceTool[] = [
   {
     name: "Plasma deposition, electrostatic chuck",
     holding: "clamped",
+    clamping: "electrostatic",
     atPeak: "held",
     edgesUp: 300,
     edgesDown: 400,
@@ -88,6 +99,7 @@ export const REFERENCE_EQUIPMENT: ReferenceTool[] = [
   {
     name: "Single-wafer wet or plating",
     holding: "edge grip",
+    clamping: "edge grip",
     atPeak: "held",
     edgesUp: 1000,
     edgesDown: 1000,
@@ -97,6 +109,7 @@ export const REFERENCE_EQUIPMENT: ReferenceTool[] = [
   {
     name: "Reflow oven, belt or plate",
     holding: "free",
+    clamping: "belt or plate",
     atPeak: "free",
     edgesUp: 800,
     edgesDown: 800,
@@ -106,6 +119,7 @@ export const REFERENCE_EQUIPMENT: ReferenceTool[] = [
   {
     name: "Edge trimmer",
     holding: "vacuum",
+    clamping: "vacuum",
     atPeak: "held",
     edgesUp: 500,
     edgesDown: 500,
@@ -115,6 +129,7 @@ export const REFERENCE_EQUIPMENT: ReferenceTool[] = [
   {
     name: "Wafer bonder",
     holding: "vacuum",
+    clamping: "vacuum",
     atPeak: "held",
     edgesUp: 300,
     edgesDown: 300,
@@ -124,6 +139,7 @@ export const REFERENCE_EQUIPMENT: ReferenceTool[] = [
   {
     name: "Tape laminator",
     holding: "vacuum",
+    clamping: "vacuum",
     atPeak: "held",
     edgesUp: 800,
     edgesDown: 800,
@@ -133,6 +149,7 @@ export const REFERENCE_EQUIPMENT: ReferenceTool[] = [
   {
     name: "Grinder and polisher",
     holding: "full-area vacuum",
+    clamping: "full-area vacuum",
     atPeak: "held",
     edgesUp: 1000,
     edgesDown: 1000,
@@ -142,6 +159,7 @@ export const REFERENCE_EQUIPMENT: ReferenceTool[] = [
   {
     name: "Plasma thinning or reveal etch",
     holding: "clamped",
+    clamping: "clamp ring",
     atPeak: "held",
     edgesUp: 500,
     edgesDown: 500,
@@ -151,6 +169,7 @@ export const REFERENCE_EQUIPMENT: ReferenceTool[] = [
   {
     name: "Chemical-mechanical polisher",
     holding: "head",
+    clamping: "polishing head",
     atPeak: "held",
     edgesUp: 200,
     edgesDown: 300,
@@ -160,6 +179,7 @@ export const REFERENCE_EQUIPMENT: ReferenceTool[] = [
   {
     name: "Frame mounter",
     holding: "full-area vacuum",
+    clamping: "full-area vacuum",
     atPeak: "held",
     edgesUp: 1000,
     edgesDown: 1500,
@@ -169,6 +189,7 @@ export const REFERENCE_EQUIPMENT: ReferenceTool[] = [
   {
     name: "Debonder",
     holding: "full-area vacuum",
+    clamping: "full-area vacuum",
     atPeak: "held",
     edgesUp: 1000,
     edgesDown: 1000,
@@ -178,6 +199,7 @@ export const REFERENCE_EQUIPMENT: ReferenceTool[] = [
   {
     name: "Frame cleaner",
     holding: "frame",
+    clamping: "frame",
     atPeak: "held",
     edgesUp: null,
     edgesDown: null,
@@ -187,6 +209,7 @@ export const REFERENCE_EQUIPMENT: ReferenceTool[] = [
   {
     name: "Dicer",
     holding: "frame",
+    clamping: "frame",
     atPeak: "held",
     edgesUp: null,
     edgesDown: null,
@@ -196,6 +219,7 @@ export const REFERENCE_EQUIPMENT: ReferenceTool[] = [
   {
     name: "Frame store",
     holding: "frame",
+    clamping: "frame",
     atPeak: "held",
     edgesUp: null,
     edgesDown: null,

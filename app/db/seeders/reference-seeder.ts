@@ -2,6 +2,12 @@ import { randomUUID } from "node:crypto";
 import type { EntityManager } from "@mikro-orm/postgresql";
 import { Seeder } from "@mikro-orm/seeder";
 import { LIMIT_DEFINITIONS, type LimitKey } from "#app/engine/rules/limits.ts";
+import {
+  BLANK_CARRIER_HANDLING,
+  BLANK_FILM_HANDLING,
+  BLANK_MATERIAL_HANDLING,
+  BLANK_TOOL_HANDLING,
+} from "#app/lib/blank-handling.ts";
 import type { StepValues } from "#app/schemas/flow.ts";
 import { noteScope } from "#app/server/audit.server.ts";
 import { BondingMaterial } from "../entities/bonding-material.ts";
@@ -37,7 +43,8 @@ export class ReferenceSeeder extends Seeder {
       if (!limits.has(key as LimitKey)) em.create(SiteLimit, { ...delivered(), key: key as LimitKey, value, source });
 
     const films = new Set((await em.findAll(Film)).map(({ name }) => name));
-    for (const film of REFERENCE_FILMS) if (!films.has(film.name)) em.create(Film, { ...delivered(), ...film });
+    for (const film of REFERENCE_FILMS)
+      if (!films.has(film.name)) em.create(Film, { ...delivered(), handling: BLANK_FILM_HANDLING, ...film });
 
     const silicon = new Set((await em.findAll(Silicon)).map(({ name }) => name));
     for (const wafer of REFERENCE_SILICON)
@@ -51,6 +58,7 @@ export class ReferenceSeeder extends Seeder {
           note: "",
           perforated: false,
           reuseLimit: 20,
+          handling: BLANK_CARRIER_HANDLING,
           temperatureLimit: measured(celsius(400), null, "assumed", "common practice, no source"),
           ...carrier,
         });
@@ -70,6 +78,7 @@ export class ReferenceSeeder extends Seeder {
           solvent: "not known",
           acid: "not known",
           base: "not known",
+          handling: BLANK_MATERIAL_HANDLING,
           ...material,
         });
     await em.flush();
@@ -112,5 +121,6 @@ function equipmentFrom(tool: ReferenceTool) {
     warpLimitEdgesDown: practice(tool.edgesDown, 1e-6),
     leastUnsupportedThickness: practice(tool.leastUnsupported, 1e-6),
     largestDiameter: measured(tool.largestDiameter * 1e-3, null, "assumed", "common practice, no source"),
+    handling: { ...BLANK_TOOL_HANDLING, clamping: tool.clamping },
   };
 }

@@ -137,6 +137,12 @@ export const DIMENSIONS = {
     units: [unit("kg/m³", "kg/m^3", ["kg/m3", "kg/m^3"]), unit("g/cm³", "g/cm^3", ["g/cm3", "g/cm^3", "g/cc"])],
     use: "kg/m3 or g/cm3",
   },
+  mass: {
+    name: "mass",
+    si: "kg",
+    units: [unit("g", "g", ["gram", "grams"]), unit("kg", "kg"), unit("mg", "mg")],
+    use: "g, kg or mg",
+  },
   angle: {
     name: "angle",
     si: "rad",

@@ -11,6 +11,12 @@ import type {
   StepInput,
 } from "#app/engine/flow/model.ts";
 import { bondHandlingOf, stepHandlingOf } from "#app/lib/flow-handling.ts";
+import {
+  bondingMaterialHandlingOf,
+  carrierHandlingOf,
+  equipmentHandlingOf,
+  filmHandlingOf,
+} from "#app/lib/library-handling.ts";
 import type { FlowDetail, StepDetail } from "#app/schemas/flow-view.ts";
 
 /** Flows and library entities as the engine takes them: plain, with the columns that it knows. */
@@ -25,6 +31,7 @@ export function filmInput({ id, name, kind, ...film }: Film): FilmInput {
     expansion: film.expansion,
     yieldStress: film.yieldStress ?? null,
     temperatureLimit: film.temperatureLimit ?? null,
+    ...filmHandlingOf(film.handling),
   };
 }
 
@@ -39,6 +46,7 @@ export function carrierInput({ id, name, material, ...carrier }: Carrier): Carri
     poissonsRatio: carrier.poissonsRatio,
     expansion: carrier.expansion ?? null,
     temperatureLimit: carrier.temperatureLimit,
+    ...carrierHandlingOf(carrier),
   };
 }
 
@@ -56,6 +64,7 @@ export function bondingMaterialInput({ id, name, ...material }: BondingMaterial)
     temperatureLimit: material.temperatureLimit,
     release: material.release,
     releaseTemperature: material.releaseTemperature,
+    ...bondingMaterialHandlingOf(material),
   };
 }
 
@@ -68,6 +77,7 @@ export function equipmentInput({ id, name, ...tool }: Equipment): EquipmentInput
     leastUnsupportedThickness: tool.leastUnsupportedThickness ?? null,
     atPeak: tool.atPeak,
     largestDiameter: tool.largestDiameter,
+    ...equipmentHandlingOf(tool.handling),
   };
 }
 
@@ -102,8 +112,10 @@ function stepInputOf(step: StepDetail): StepInput {
     exposures: step.exposures,
     planned: step.planned,
     siliconAfter: step.siliconAfter,
-    adds: step.films.flatMap(({ change, side, film, thickness, stress, coverage }) =>
-      change === "adds" && thickness ? [{ side, film, thickness, stress, coverage }] : [],
+    adds: step.films.flatMap(({ change, side, film, thickness, stress, stressRecord, coverage }) =>
+      change === "adds" && thickness
+        ? [{ side, film, thickness, stress, coverage, ...(stressRecord ? { stressRecord } : {}) }]
+        : [],
     ),
     removes: step.films.flatMap(({ change, side, film }) =>
       change === "removes" ? [{ side, filmId: film.id, filmName: film.name }] : [],

@@ -3,6 +3,7 @@ import { BondingMaterial } from "#app/db/entities/bonding-material.ts";
 import { Carrier } from "#app/db/entities/carrier.ts";
 import { Equipment } from "#app/db/entities/equipment.ts";
 import { Film } from "#app/db/entities/film.ts";
+import { stressRecordOf } from "#app/lib/library-handling.ts";
 import type { StepPlan } from "#app/schemas/flow-plan.ts";
 import type { StepDetail, StepFilmDetail } from "#app/schemas/flow-view.ts";
 import { bondingMaterialInput, carrierInput, equipmentInput, filmInput } from "./flow-inputs.ts";
@@ -55,6 +56,7 @@ function stepDetail(step: StepPlan, { tools, carriers, materials, films }: Libra
           thickness,
           ownStress: stress,
           stress: stress ?? film.stress,
+          stressRecord: stress ? null : stressRecordOf(film),
           coverage: coverage ?? 1,
         },
       ];

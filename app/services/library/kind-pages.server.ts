@@ -3,6 +3,7 @@ import { KIND_KEYS, kindOf, type KindSlug } from "#app/lib/library-kinds.ts";
 import { notFound } from "#app/server/problem.server.ts";
 import type { ActorScope } from "#app/server/scope.server.ts";
 import { siteLimits } from "../limits.server.ts";
+import { listCarrierUnits } from "./carrier-units.server.ts";
 import { getLibraryRecord, listLibraryAt } from "./library.server.ts";
 import { tryPair } from "./pair.server.ts";
 import { whereUsed } from "./use.server.ts";
@@ -41,7 +42,7 @@ export async function getKindRecord<Slug extends KindSlug>(
   return { slug, ...(await getLibraryRecord(scope, KIND_KEYS[slug], id)) };
 }
 
-/** A record of a kind with where it is used and, of a carrier, the pair that the address asks for. */
+/** A record of a kind with where it is used and, of a carrier, the pair and the pieces that the address asks for. */
 export async function getKindPage(
   scope: ActorScope,
   slug: KindSlug,
@@ -49,10 +50,11 @@ export async function getKindPage(
   search: URLSearchParams,
 ): Promise<KindPageData> {
   const found = await getKindRecord(scope, slug, id);
-  const [uses, site, trial] = await Promise.all([
+  const [uses, site, trial, units] = await Promise.all([
     whereUsed(scope, KIND_KEYS[slug], found.record.id),
     siteFacts(scope),
     found.slug === "carriers" ? tryPair(scope, found.record, search) : null,
+    found.slug === "carriers" ? listCarrierUnits(scope, found.record.id, search) : null,
   ]);
-  return { ...found, uses, site, trial };
+  return { ...found, uses, site, trial, units };
 }

@@ -1,6 +1,7 @@
 import { describe, expect, it } from "vitest";
 import { pairCut } from "#app/components/carriers/pair-cut.ts";
 import { pairAnswer, whyPairBow } from "#app/components/carriers/pair-words.ts";
+import { BLANK_CARRIER_HANDLING } from "#app/lib/blank-handling.ts";
 import type { TriedPair } from "#app/lib/pair-trial.ts";
 import type { LibraryRecords } from "#app/schemas/library-records.ts";
 
@@ -42,6 +43,7 @@ const CARRIER: LibraryRecords["carrier"] = {
   passesInfrared: true,
   perforated: false,
   reuseLimit: 20,
+  handling: BLANK_CARRIER_HANDLING,
 };
 
 const plain = (text: string) => text.replaceAll("\u00A0", " ");

@@ -1,10 +1,14 @@
-import { MemoryRouter } from "react-router";
+import { createMemoryRouter, MemoryRouter, RouterProvider } from "react-router";
 import { describe, expect, it } from "vitest";
 import { bondingMaterialList, bondingMaterialView } from "#app/components/carriers/bonding-material-view.tsx";
+import { CarrierPieces } from "#app/components/carriers/CarrierPieces.tsx";
 import { LimitsTable } from "#app/components/carriers/LimitsTable.tsx";
+import { resistanceText } from "#app/components/carriers/resistance-words.ts";
 import { siliconView } from "#app/components/carriers/silicon-view.tsx";
 import { TemperatureBand } from "#app/components/carriers/TemperatureBand.tsx";
 import { toolView } from "#app/components/carriers/tool-view.tsx";
+import { BLANK_MATERIAL_HANDLING, BLANK_TOOL_HANDLING } from "#app/lib/blank-handling.ts";
+import { usesLeft, type CarrierUnitRow } from "#app/lib/carrier-units.ts";
 import type { LimitGroup } from "#app/lib/limit-rows.ts";
 import type { LibraryRecords } from "#app/schemas/library-records.ts";
 import { attributes, render, words } from "../drawings/render.ts";
@@ -38,6 +42,7 @@ const SLIDE: LibraryRecords["bondingMaterial"] = {
   solvent: "not known",
   acid: "not known",
   base: "not known",
+  handling: BLANK_MATERIAL_HANDLING,
 };
 const LASER = { ...SLIDE, flows: false, softening: stated(celsius(150)), temperatureLimit: stated(celsius(280)) };
 
@@ -66,6 +71,83 @@ describe("a bonding material", () => {
     );
     const cell = bondingMaterialList(SITE).columns.find(({ key }) => key === "modulus");
     expect(words(render(cell?.cell(SLIDE)))).toBe("150 ± 45 data sheet 1600");
+  });
+});
+
+describe("what a bonding material stands", () => {
+  it("gives the word of the rules with the words of the data sheet, and names what is missing", () => {
+    const material = {
+      ...SLIDE,
+      base: "ok 30 min",
+      handling: { ...BLANK_MATERIAL_HANDLING, base: { word: "resists" as const, longest: 1800 } },
+    };
+    const { facts, properties } = bondingMaterialView(material, SITE);
+    const fact = (label: string) => plain(words(render(<>{facts.find((each) => each.label === label)?.value}</>)));
+    expect(fact("Base")).toBe("resists for 30 min ok 30 min");
+    expect(fact("Acid")).toBe("not given");
+    expect(fact("Not given")).toContain("temperature limit in vacuum, weight loss in vacuum");
+    expect(fact("Not given")).not.toContain("peel force");
+    expect(properties.map(({ label }) => label)).not.toContain("Weight loss in vacuum");
+  });
+
+  it("asks for the peel of what is peeled off", () => {
+    const { facts } = bondingMaterialView({ ...LASER, release: "mechanical peel" }, SITE);
+    expect(facts.find(({ label }) => label === "Not given")?.value).toContain("bend radius at the peel front");
+  });
+
+  it.each([
+    [{ word: "attacked", longest: 600 }, "attacked after 10 min"],
+    [{ word: "resists", longest: 7200 }, "resists for 2 h"],
+    [{ word: "attacked" }, "attacked"],
+    [{ word: "unknown" }, "not known"],
+  ] as const)("says %j in words", (resistance, text) => {
+    expect(plain(resistanceText(resistance))).toBe(text);
+  });
+});
+
+describe("the pieces of a carrier", () => {
+  const unit: CarrierUnitRow = {
+    id: "u",
+    mark: "G30-0411",
+    uses: 20,
+    state: "cleaned",
+    lastUsedOn: null,
+    stamp: { version: 3, updatedAt: "2026-11-18T08:00:00.000Z", updatedBy: "Mikael Lindqvist" },
+  };
+  const params = { query: "", sort: "mark", descending: false, page: 1, filters: {} };
+  const pieces = (mayEdit: boolean, row = unit) =>
+    render(
+      <RouterProvider
+        router={createMemoryRouter([
+          {
+            path: "/",
+            element: (
+              <CarrierPieces
+                units={{ page: { rows: [row], total: 1, params }, all: 1 }}
+                limit={20}
+                mayEdit={mayEdit}
+                answer={null}
+              />
+            ),
+          },
+        ])}
+      />,
+    );
+
+  it("says what is left of the uses", () => {
+    expect(words(pieces(false))).toContain("none left");
+    expect(usesLeft({ uses: 22, state: "in use" }, 20)).toBe("2 beyond its limit");
+    expect(usesLeft({ uses: 7, state: "in use" }, 20)).toBe("13 left");
+    expect(usesLeft({ uses: 7, state: "scrapped" }, 20)).toBe("none, scrapped");
+  });
+
+  it("offers what its state allows, and only to those who may", () => {
+    expect(attributes(pieces(true), "aria-label")).toEqual(
+      expect.arrayContaining(["Count a use: G30-0411", "Scrap: G30-0411"]),
+    );
+    expect(words(pieces(true))).not.toContain("Take back");
+    expect(words(pieces(true, { ...unit, state: "scrapped" }))).toContain("Take back");
+    expect(words(pieces(false))).not.toMatch(/Count a use|Add a piece/);
   });
 });
 
@@ -109,6 +191,7 @@ describe("a tool", () => {
     warpLimitEdgesDown: stated(500e-6),
     leastUnsupportedThickness: stated(300e-6),
     largestDiameter: stated(0.3),
+    handling: BLANK_TOOL_HANDLING,
   };
 
   it("says the warp that it takes, edges up and edges down, and whether peak counts", () => {

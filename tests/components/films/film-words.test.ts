@@ -1,5 +1,6 @@
 import { describe, expect, it } from "vitest";
-import { filmAnswer, filmHistory } from "#app/components/films/film-words.ts";
+import { filmAnswer, filmHistory, measuredOn } from "#app/components/films/film-words.ts";
+import { BLANK_FILM_HANDLING } from "#app/lib/blank-handling.ts";
 import type { LibraryRecords } from "#app/schemas/library-records.ts";
 
 /** Stress in Pa, tension positive. */
@@ -18,6 +19,7 @@ const COPPER: LibraryRecords["film"] = {
   expansion: stated(16.7e-6),
   yieldStress: stated(200e6),
   temperatureLimit: null,
+  handling: BLANK_FILM_HANDLING,
 };
 
 describe("the words of a film", () => {
@@ -35,5 +37,17 @@ describe("the words of a film", () => {
     expect(plain(filmHistory(COPPER))).toContain("It yields at 200 MPa");
     expect(filmHistory({ ...COPPER, yieldStress: null })).toContain("elastic");
     expect(filmHistory({ ...COPPER, kind: "polymer", yieldStress: null })).toContain("down to zero");
+  });
+});
+
+describe("what a stress was measured on", () => {
+  it("says what is given and no more", () => {
+    expect(measuredOn(BLANK_FILM_HANDLING)).toBe("not given");
+    expect(plain(measuredOn({ ...BLANK_FILM_HANDLING, stressState: "as deposited", stressFilmThickness: 5e-6 }))).toBe(
+      "5 µm, as deposited",
+    );
+    expect(plain(measuredOn({ ...BLANK_FILM_HANDLING, monitorThickness: 725e-6, monitorDiameter: 0.2 }))).toBe(
+      "on 725 µm silicon, a wafer of 200 mm",
+    );
   });
 });

@@ -48,6 +48,7 @@ const stepDetail = (step: StepInput, index: number, own: readonly string[]): Ste
     thickness,
     ownStress: own.includes(film.name) ? stress : null,
     stress,
+    stressRecord: null,
     coverage,
   })),
 });

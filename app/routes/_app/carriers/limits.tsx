@@ -1,9 +1,11 @@
-import { data, redirect } from "react-router";
+import { data, Link, redirect } from "react-router";
 import { CarrierPlaces } from "#app/components/carriers/CarrierPlaces.tsx";
 import { LimitsForm } from "#app/components/carriers/LimitsForm.tsx";
 import { LimitsTable } from "#app/components/carriers/LimitsTable.tsx";
 import { PageHead } from "#app/components/layout/PageHead.tsx";
-import { isChanged } from "#app/lib/limit-rows.ts";
+import { EmptyState } from "#app/components/ui/EmptyState.tsx";
+import { ListHead } from "#app/components/ui/ListHead.tsx";
+import { isChanged, searchLimits } from "#app/lib/limit-rows.ts";
 import { limitsSchema } from "#app/schemas/site-limit.ts";
 import { scopeOf } from "#app/server/contexts.server.ts";
 import { readForm } from "#app/server/form.server.ts";
@@ -16,7 +18,8 @@ export const meta: Route.MetaFunction = () => [{ title: "Limits · Planeward" }]
 
 export async function loader({ context, url }: Route.LoaderArgs) {
   const limits = await listLimits(scopeOf(context));
-  return { ...limits, editing: limits.mayEdit ? Number(url.searchParams.get("rule")) : 0 };
+  const editing = limits.mayEdit ? Number(url.searchParams.get("rule")) : 0;
+  return { ...limits, editing, query: (url.searchParams.get("q") ?? "").trim().slice(0, 100) };
 }
 
 export async function action({ request, context, url }: Route.ActionArgs) {
@@ -34,31 +37,52 @@ export async function action({ request, context, url }: Route.ActionArgs) {
 }
 
 export default function Limits({ loaderData, actionData }: Route.ComponentProps) {
-  const { groups, mayEdit, editing } = loaderData;
+  const { groups, mayEdit, editing, query } = loaderData;
   const all = groups.flatMap(({ limits }) => limits);
+  const shown = searchLimits(groups, query);
+  const found = shown.reduce((sum, { limits }) => sum + limits.length, 0);
   const changed = all.filter(isChanged).length;
   return (
     <>
       <CarrierPlaces />
       <PageHead
         title="Limits"
-        remark={`${all.length} limits, ${changed === 0 ? "all" : all.length - changed} as delivered`}
+        remark={
+          query
+            ? `${found} of ${all.length} limits`
+            : `${all.length} limits, ${changed === 0 ? "all" : all.length - changed} as delivered`
+        }
       />
       <p className="mb-4 max-w-[60em] text-quiet">
         What the handling rules judge by. At a limit a step passes with caution; beyond it the step fails. Each is this
         site’s to set: common practice is a habit of the trade, not a published figure.
       </p>
-      <div className="frame">
-        {groups.map((group) => (
-          <div key={group.rule} className="border-t border-ink first:border-0">
-            {group.rule === editing ? (
-              <LimitsForm group={group} lastResult={actionData?.lastResult} opened={actionData?.opened ?? {}} />
-            ) : (
-              <LimitsTable group={group} mayEdit={mayEdit} />
-            )}
-          </div>
-        ))}
-      </div>
+      <ListHead what="limits" />
+      {shown.length === 0 && (
+        <EmptyState
+          title="No limit fits"
+          actions={
+            <Link to="/carriers/limits" className="btn">
+              All limits
+            </Link>
+          }
+        >
+          Search by a word of a limit, of its source or of its rule, or by ‘rule 6’.
+        </EmptyState>
+      )}
+      {shown.length > 0 && (
+        <div className="frame">
+          {shown.map((group) => (
+            <div key={group.rule} className="border-t border-ink first:border-0">
+              {group.rule === editing ? (
+                <LimitsForm group={group} lastResult={actionData?.lastResult} opened={actionData?.opened ?? {}} />
+              ) : (
+                <LimitsTable group={group} mayEdit={mayEdit} />
+              )}
+            </div>
+          ))}
+        </div>
+      )}
     </>
   );
 }
