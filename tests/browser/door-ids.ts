@@ -51,6 +51,8 @@ export async function ternIds(engineer: APIRequestContext): Promise<DoorIds> {
         "select s.id from stack s join program p on p.id = s.program_id where p.slug = 'tern'",
       ),
       filmId: await idOf(query, "select id from film where name = 'Polymer dielectric A'"),
+      stepTemplateId: await idOf(query, "select id from step_template order by name limit 1"),
+      flowTemplateId: await idOf(query, "select id from flow_template order by name limit 1"),
       recordId: await idOf(query, "select id from carrier order by name limit 1"),
     };
   });

@@ -36,11 +36,19 @@ const DOORS: Record<string, string> = {
   "/flows": "302 403 200 200 200 200 403",
   "/flows/new": "302 403 403 200 200 403 403",
   "/flows/:flowId": "302 404 200 200 200 200 404",
+  "/flows/:flowId/what-if": "302 404 403 200 200 403 404",
+  "/flows/library/:kind": "302 403 200 200 200 200 200",
+  "/flows/library/flows/:templateId": "302 403 200 200 200 200 200",
+  "/flows/library/steps/new": "302 403 403 200 200 403 403",
+  "/flows/library/steps/:templateId": "302 403 200 200 200 200 200",
   "/flows/:flowId/edit": "302 404 403 200 200 403 404",
   "/flows/:flowId/steps/new": "302 404 403 200 200 403 404",
   "/flows/:flowId/steps/:stepId": "302 404 200 200 200 200 404",
   "/assessments/:assessmentId": "302 404 200 200 200 200 404",
   "/assessments/:assessmentId/working": "302 404 200 200 200 200 404",
+  "/assessments/:assessmentId/compare": "302 404 200 200 200 200 404",
+  "/assessments/change-request": "302 403 200 200 200 200 403",
+  "/assessments/change-request/print": "302 403 400 400 400 400 403",
   "/carriers": "302 403 302 302 302 302 302",
   "/carriers/limits": "302 403 200 200 200 200 200",
   "/carriers/:kind": "302 403 200 200 200 200 200",
@@ -67,10 +75,25 @@ function addresses(entries: RouteConfigEntry[], above = ""): string[] {
 /** What an address asks for that shows nothing without it. */
 const ASKED: Record<string, string> = { "/assessments/:assessmentId/working": "?step=14&shape=released" };
 
+/** Ids for an address: the step library has kinds of its own. */
+const idsFor = (address: string, ids: DoorIds): DoorIds =>
+  address.startsWith("/flows/library")
+    ? {
+        ...ids,
+        kind: "flows",
+        templateId: ids[address.includes("/steps/") ? "stepTemplateId" : "flowTemplateId"] ?? "",
+      }
+    : ids;
+
 /** The address with ids in it. */
-const filled = (address: string, ids: DoorIds) =>
-  address.replace(/:(\w+)|\*/g, (parameter, name: string | undefined) => ids[name ?? parameter] ?? parameter) +
-  (ASKED[address] ?? "");
+const filled = (address: string, ids: DoorIds) => {
+  const known = idsFor(address, ids);
+  const path = address.replace(
+    /:(\w+)|\*/g,
+    (parameter, name: string | undefined) => known[name ?? parameter] ?? parameter,
+  );
+  return path + (ASKED[address] ?? "");
+};
 
 async function visitor(role: (typeof VISITORS)[number], baseURL: string | undefined): Promise<APIRequestContext> {
   const context = await newRequest.newContext({ baseURL: baseURL ?? "" });
