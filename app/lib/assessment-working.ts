@@ -1,4 +1,4 @@
-import type { Working } from "#app/engine/working.ts";
+import { shownWorking, type ShownWorking } from "./shown-working.ts";
 import type { AssessmentResult } from "#app/schemas/assessment-result.ts";
 import { celsius, figureText } from "./assessment-figure.ts";
 import { STEP_SHAPES, type StepShape } from "./assessment-selected.ts";
@@ -10,7 +10,7 @@ export interface FigureAsked {
   step: { number: number; title: string };
   label: string;
   value: string;
-  working: Working;
+  working: ShownWorking;
 }
 
 /**
@@ -27,7 +27,7 @@ export function figureAskedFor(result: AssessmentResult, search: URLSearchParams
     step: { number: step.number, title: step.title },
     label: figure.label,
     value: figureText(figure),
-    working: figure.working,
+    working: shownWorking(figure.working),
   };
 }
 
@@ -41,7 +41,7 @@ function shapeAskedFor(result: AssessmentResult, search: URLSearchParams): Figur
     step: { number: step.number, title: step.title },
     label: LABELS[shape](celsius(found.temperature)),
     value: sentenceCase(shapeText(found)),
-    working: found.working,
+    working: shownWorking(found.working),
   };
 }
 

@@ -1,6 +1,7 @@
 import { z } from "zod";
-import type { UnitSymbol, Working } from "#app/engine/working.ts";
+import type { UnitSymbol } from "#app/engine/working.ts";
 import type { ShapeRegime, SupportClass } from "#app/engine/vocabulary.ts";
+import type { ShownWorking } from "#app/lib/shown-working.ts";
 import type { PhysicalRange } from "#app/lib/read-quantity.ts";
 import { RULES } from "./ranges.ts";
 
@@ -135,7 +136,8 @@ export interface EstimateAnswer {
   /** free silicon thinner than this rolls about one axis; null when none from 1 µm to 2 mm does, 2 mm when all of it does */
   curls_below_m: number | null;
   sweep?: { thickness_m: number; warp_m: number; linear_warp_m: number; regime: ShapeRegime }[];
-  working?: { shape: Working; stoney: Working; film_forces: Working[] };
+  /** each with the words of its equation */
+  working?: { shape: ShownWorking; stoney: ShownWorking; film_forces: ShownWorking[] };
 }
 
 /** One thing wrong with a request: where, as a JSON pointer into it, and what. */

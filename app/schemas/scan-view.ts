@@ -1,5 +1,5 @@
 import type { SourceKind } from "#app/engine/vocabulary.ts";
-import type { Working } from "#app/engine/working.ts";
+import type { ShownWorking } from "#app/lib/shown-working.ts";
 import type { ScanParameters, ScanResult } from "./scan-result.ts";
 
 /** A scan as a list shows it; SI, standard uncertainties. */
@@ -48,7 +48,7 @@ export interface ScanDetail {
   files: Record<"before" | "after", ScanFileView>;
   parameters: ScanParameters;
   result: ScanResult;
-  working: Working;
+  working: ShownWorking;
   engineVersion: string;
   createdAt: string;
   createdBy: string;

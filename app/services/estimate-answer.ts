@@ -9,6 +9,7 @@ import { stackWorking } from "#app/engine/stack/working.ts";
 import { standardBow } from "#app/engine/stoney/bow.ts";
 import { ENGINE_VERSION } from "#app/engine/version.ts";
 import type { StackDraft } from "#app/lib/stack-draft.ts";
+import { shownWorking } from "#app/lib/shown-working.ts";
 import { stackOf } from "#app/lib/stack-of-request.ts";
 import { panelRequests, type StackPanel } from "#app/lib/stack-panel.ts";
 import type { Estimated } from "#app/lib/stack-words.ts";
@@ -98,7 +99,7 @@ function sweepOf(stack: StackInput, { from_m, to_m, points }: NonNullable<Estima
 
 function workingOf(stack: StackInput, estimate: ReturnType<typeof estimateStack>): EstimateAnswer["working"] {
   const { shape, stoney, filmForces } = stackWorking(stack, estimate);
-  return { shape, stoney, film_forces: filmForces };
+  return { shape: shownWorking(shape), stoney: shownWorking(stoney), film_forces: filmForces.map(shownWorking) };
 }
 
 /** Names of the engine's layer properties in a request. */

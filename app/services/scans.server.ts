@@ -2,6 +2,7 @@ import type { EntityManager } from "@mikro-orm/postgresql";
 import { Scan } from "#app/db/entities/scan.ts";
 import { ScanFile } from "#app/db/entities/scan-file.ts";
 import { stoneyStressWorking } from "#app/engine/stoney/working.ts";
+import { shownWorking } from "#app/lib/shown-working.ts";
 import { PAGE_SIZE, type ListPage, type ListParams } from "#app/lib/list-params.ts";
 import { programsWhere, type ProgramPermission } from "#app/policies/permissions.ts";
 import type { Actor } from "#app/policies/roles.ts";
@@ -128,12 +129,14 @@ export async function getScan(scope: ActorScope, id: string | undefined): Promis
       files: { before: file(scan.before), after: file(scan.after) },
       parameters,
       result,
-      working: stoneyStressWorking({
-        curvatureChange: result.curvatureChange,
-        filmThickness: parameters.filmThickness,
-        substrateThickness: parameters.siliconThickness,
-        biaxialModulus: result.biaxialModulus,
-      }),
+      working: shownWorking(
+        stoneyStressWorking({
+          curvatureChange: result.curvatureChange,
+          filmThickness: parameters.filmThickness,
+          substrateThickness: parameters.siliconThickness,
+          biaxialModulus: result.biaxialModulus,
+        }),
+      ),
       engineVersion: scan.engineVersion,
       createdAt: scan.createdAt.toISOString(),
       createdBy: scan.createdBy.name,

@@ -1,9 +1,9 @@
 import { Link } from "react-router";
 import { WorkingView } from "#app/components/working/WorkingView.tsx";
-import type { Working } from "#app/engine/working.ts";
+import type { ShownWorking } from "#app/lib/shown-working.ts";
 
 /** The calculation behind the stress. */
-export function ScanWorking({ working }: { working: Working }) {
+export function ScanWorking({ working }: { working: ShownWorking }) {
   return (
     <section id="working" aria-labelledby="working-title" className="scroll-mt-4">
       <h2 id="working-title" className="font-semibold">

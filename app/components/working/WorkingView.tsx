@@ -1,15 +1,13 @@
-import { EQUATIONS, type Equation } from "#app/engine/equations.ts";
-import { citation, SOURCES, type SourceId } from "#app/engine/sources.ts";
-import type { Working, WorkingLine } from "#app/engine/working.ts";
+import type { WorkingLine } from "#app/engine/working.ts";
 import { formatInUnit } from "#app/lib/format-unit.ts";
-import { shortCitation } from "#app/lib/short-citation.ts";
+import type { ShownWorking } from "#app/lib/shown-working.ts";
 import { Formula } from "./Formula.tsx";
 import { FormulaLines } from "./FormulaLines.tsx";
 
 const HEADINGS: Record<number, "h2" | "h3" | "h4" | "h5"> = { 2: "h2", 3: "h3", 4: "h4", 5: "h5" };
 
 export interface WorkingViewProps {
-  working: Working;
+  working: ShownWorking;
   /** level of its heading; the calculations that it rests on stand one below, down to the sixth */
   level?: number;
 }
@@ -19,16 +17,15 @@ export interface WorkingViewProps {
  * calculations that it rests on.
  */
 export function WorkingView({ working, level = 3 }: WorkingViewProps) {
-  const { equation: id, inputs, result, note, from = [] } = working;
-  const equation: Equation = EQUATIONS[id];
+  const { title, formula, remark, sources, inputs, result, from = [] } = working;
   const Heading = HEADINGS[level] ?? "h6";
   return (
     <section>
-      <Heading className="font-semibold">{equation.title}</Heading>
-      <FormulaLines title={equation.title} formula={equation.formula} />
-      <div className="overflow-x-auto" tabIndex={0} role="group" aria-label={`Figures: ${equation.title}`}>
+      <Heading className="font-semibold">{title}</Heading>
+      <FormulaLines title={title} formula={formula} />
+      <div className="overflow-x-auto" tabIndex={0} role="group" aria-label={`Figures: ${title}`}>
         <table className="table">
-          <caption className="sr-only">{equation.title}</caption>
+          <caption className="sr-only">{title}</caption>
           <thead>
             <tr>
               <th scope="col">Symbol</th>
@@ -47,9 +44,9 @@ export function WorkingView({ working, level = 3 }: WorkingViewProps) {
         </table>
       </div>
       <p className="mt-2 text-label text-quiet">
-        <Formula text={[note, equation.range, equation.caution].filter(Boolean).join(" ")} />
+        <Formula text={remark} />
       </p>
-      <p className="mt-1 text-label text-quiet">Sources: {equation.sources.map(shortCitation).join("; ")}.</p>
+      <p className="mt-1 text-label text-quiet">Sources: {sources.join("; ")}.</p>
       {from.length > 0 && (
         <div className="mt-3 space-y-4 border-l border-edge pl-4">
           {from.map((part, index) => (
@@ -70,12 +67,9 @@ function Line({ line, result = false }: { line: WorkingLine; result?: boolean })
       </th>
       <td>
         {meaning}
-        {source !== undefined && <span className="block text-label font-normal text-quiet">{sourceWords(source)}</span>}
+        {source !== undefined && <span className="block text-label font-normal text-quiet">{source}</span>}
       </td>
       <td className="num">{formatInUnit(value, unit, temperaturePoint)}</td>
     </tr>
   );
 }
-
-/** A line's source is a key of the bibliography, or the provenance of an input in words. */
-const sourceWords = (source: string) => (source in SOURCES ? citation(source as SourceId) : source);

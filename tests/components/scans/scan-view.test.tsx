@@ -3,6 +3,7 @@ import { describe, expect, it } from "vitest";
 import { ScanView } from "#app/components/scans/ScanView.tsx";
 import { stoneyStressWorking } from "#app/engine/stoney/working.ts";
 import { readProfile } from "#app/lib/profile-csv.ts";
+import { shownWorking } from "#app/lib/shown-working.ts";
 import type { ScanDetail } from "#app/schemas/scan-view.ts";
 import { scanResult } from "#app/services/scan-result-of.ts";
 import { render, words } from "#tests/components/drawings/render.ts";
@@ -25,7 +26,9 @@ function detail(tail: string): ScanDetail {
     files: { before: file("before.csv"), after: file("after.csv") },
     parameters: PARAMETERS,
     result,
-    working: stoneyStressWorking({ ...MONITOR, curvatureChange: result.curvatureChange, biaxialModulus: 180e9 }),
+    working: shownWorking(
+      stoneyStressWorking({ ...MONITOR, curvatureChange: result.curvatureChange, biaxialModulus: 180e9 }),
+    ),
     engineVersion: "0.1.0",
     createdAt: "2026-12-01T08:00:00.000Z",
     createdBy: "Jude Okafor",

@@ -5,6 +5,7 @@ import { stoneyCurvatureWorking } from "#app/engine/stoney/working.ts";
 import type { UnitSymbol, Working } from "#app/engine/working.ts";
 import { Formula } from "#app/components/working/Formula.tsx";
 import { FormulaLines } from "#app/components/working/FormulaLines.tsx";
+import { shownWorking } from "#app/lib/shown-working.ts";
 import { WorkingView } from "#app/components/working/WorkingView.tsx";
 import { formatInUnit } from "#app/lib/format-unit.ts";
 import { render, words } from "../drawings/render.ts";
@@ -71,7 +72,7 @@ describe("a working", () => {
     note: "A note of this use.",
     from: [curvature],
   };
-  const markup = render(<WorkingView working={working} />);
+  const markup = render(<WorkingView working={shownWorking(working)} />);
   const said = words(markup);
 
   it("says the equation, every symbol with its unit, the result, where it holds and what might be got wrong", () => {
@@ -98,6 +99,6 @@ describe("a working", () => {
   it("puts what it rests on below it, one heading deeper, never past the sixth", () => {
     expect(markup).toMatch(/<h3[^>]*>Bow from curvature<\/h3>/);
     expect(markup).toMatch(/<h4[^>]*>Curvature from a thin film&#x27;s stress<\/h4>/);
-    expect(render(<WorkingView working={working} level={6} />)).not.toMatch(/<h[78]/);
+    expect(render(<WorkingView working={shownWorking(working)} level={6} />)).not.toMatch(/<h[78]/);
   });
 });
