@@ -10,6 +10,7 @@ import { stepsSampling } from "../../engine/uncertainty/sample-steps.ts";
 import { sampleUncertainty, sampling } from "../../engine/uncertainty/sample-uncertainty.ts";
 import { shapeCurve } from "../../engine/uncertainty/shape-curve.ts";
 import { sourcesOf } from "../../engine/uncertainty/sources.ts";
+import { liveBundle } from "./bundle.mjs";
 import { inputsOf, stackOf, uncertaintiesOf } from "./cases.mjs";
 import { needNumpy, numpyLaminate } from "./numpy.mjs";
 import { scatter, shortest, slope } from "./timing.mjs";
@@ -194,6 +195,15 @@ function flow() {
   console.log(`Growth of time (1 is linear): layers ${layersSlope}, steps ${stepsSlope}, draws ${drawsSlope}`);
 }
 
+async function size() {
+  const { gzip, plain, packages } = await liveBundle();
+  const kB = (bytes) => `${(bytes / 1e3).toFixed(1)} kB`;
+  console.log(
+    `Live part in the browser (estimate, sweep, assessment, units, limits): ${kB(gzip)} gzip (wanted 60 kB), ${kB(plain)} plain, ${(100 * packages).toFixed(0)} % of it packages`,
+  );
+}
+
 compare();
 sweep();
 flow();
+await size();
