@@ -53,20 +53,26 @@ export function carrierPlate(bond: BondState): StackEntry[] {
 
 /** The laminate of a state at a temperature (K), with or without the carrier that it is bonded to. */
 export function layersOf(state: WaferState, temperature: number, options: { carrier: boolean }): LayerStack {
+  const { back, siliconEntries, front, bond } = state;
   const entries: StackEntry[] = [];
   const films: LayerStack["films"] = [];
-  const put = (entry: StackEntry, film: FilmState | null) => {
-    entries.push(entry);
-    films.push(film);
-  };
-  for (const film of state.back.toReversed()) put(film.entry, film);
-  for (const silicon of state.siliconEntries) put(silicon, null);
-  for (const film of state.front) put(film.entry, film);
-  if (options.carrier && state.bond) {
-    put(adhesiveEntry(state.bond, temperature), null);
-    put(carrierEntry(state.bond), null);
+  for (let n = back.length - 1; n >= 0; n -= 1) putFilm(back[n], entries, films);
+  for (const silicon of siliconEntries) {
+    entries.push(silicon);
+    films.push(null);
+  }
+  for (const film of front) putFilm(film, entries, films);
+  if (options.carrier && bond) {
+    entries.push(adhesiveEntry(bond, temperature), carrierEntry(bond));
+    films.push(null, null);
   }
   return { entries, films };
+}
+
+function putFilm(film: FilmState | undefined, entries: StackEntry[], films: LayerStack["films"]): void {
+  if (!film) return;
+  entries.push(film.entry);
+  films.push(film);
 }
 
 /** Whether a state bends differently along x and y. */

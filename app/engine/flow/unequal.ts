@@ -31,7 +31,7 @@ export function unequalCurvature(
   temperature: number,
   slidingOn: StackEntry[] | null,
 ): UnequalCurvature {
-  const layers = entries.map((entry, at) => directionalEntry(entry, placed[at]?.flowed ?? 0));
+  const layers = entries.map((entry, at) => directionalEntry(entry, placed.flowed[at] ?? 0));
   const wafer = solveDirectionalLaminate(layers, { temperature });
   if (!slidingOn) {
     const { curvatureX, curvatureY, twist, principal, effectiveThickness } = wafer;
