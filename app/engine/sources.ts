@@ -1,3 +1,6 @@
+import type { Source } from "./sources/source.ts";
+import { STATISTICS } from "./sources/statistics.ts";
+
 /**
  * Bibliography. Every constant and equation of the engine names an entry by its key.
  *
@@ -5,22 +8,7 @@
  * the trade without a publication are `common practice, no source`; results worked out for this program are `own derivation`
  * (on paper, checked numerically) or `own computation` (numerical solution, described in `place`).
  */
-export type SourceBasis =
-  | "read"
-  | "abstract read"
-  | "from memory of the named publication"
-  | "common practice, no source"
-  | "own derivation"
-  | "own computation";
-
-export interface Source {
-  author: string;
-  title: string;
-  year: number | null;
-  /** Journal with volume and page, publisher, or institution; never an access address. */
-  place: string;
-  basis: SourceBasis;
-}
+export type { Source, SourceBasis } from "./sources/source.ts";
 
 const memory = "from memory of the named publication";
 
@@ -348,55 +336,7 @@ export const SOURCES = {
     place: "balance of forces of each plate and of the moments of both",
     basis: "own derivation",
   },
-  "gum-supplement-1-2008": {
-    author: "Joint Committee for Guides in Metrology",
-    title: "JCGM 101:2008, Propagation of distributions using a Monte Carlo method",
-    year: 2008,
-    place: "JCGM, clauses 6.4, 7 and 9.2",
-    basis: memory,
-  },
-  "blackman-vigna-2021": {
-    author: "D. Blackman, S. Vigna",
-    title: "Scrambled linear pseudorandom number generators",
-    year: 2021,
-    place: "ACM Transactions on Mathematical Software 47, article 36",
-    basis: memory,
-  },
-  "marsaglia-tsang-2000": {
-    author: "G. Marsaglia, W. W. Tsang",
-    title: "The ziggurat method for generating random variables",
-    year: 2000,
-    place: "Journal of Statistical Software 5, number 8",
-    basis: memory,
-  },
-  "wichura-1988": {
-    author: "M. J. Wichura",
-    title: "Algorithm AS 241: the percentage points of the normal distribution",
-    year: 1988,
-    place: "Applied Statistics 37, page 477",
-    basis: memory,
-  },
-  "cranley-patterson-1976": {
-    author: "R. Cranley, T. N. L. Patterson",
-    title: "Randomization of number theoretic methods for multiple integration",
-    year: 1976,
-    place: "SIAM Journal on Numerical Analysis 13, page 904",
-    basis: memory,
-  },
-  "cools-kuo-nuyens-2006": {
-    author: "R. Cools, F. Y. Kuo, D. Nuyens",
-    title: "Constructing embedded lattice rules for multivariate integration",
-    year: 2006,
-    place: "SIAM Journal on Scientific Computing 28, page 2162",
-    basis: memory,
-  },
-  "sampling-layers": {
-    author: "this program",
-    title: "Draws in two layers, lattice along the steepest direction, control by the first-order line",
-    year: null,
-    place: "unbiased for any model; checked against closed forms for linear models and against plain draws",
-    basis: "own derivation",
-  },
+  ...STATISTICS,
   "common-practice": {
     author: "the trade",
     title: "Common practice in wafer handling",
