@@ -1,4 +1,5 @@
 import type { DirectionalLayer } from "../directional/layer.ts";
+import { applyStiffness, isotropicStiffness } from "../directional/plane-stiffness.ts";
 import { glassTransition, lockTemperature, type BondState } from "./bond.ts";
 import { carrierExpansion } from "./carrier-expansion.ts";
 import { isDirectional } from "./film-entry.ts";
@@ -18,7 +19,7 @@ const SOFT_SHARE = 0.01;
 function adhesiveEntry(bond: BondState, temperature: number): StackEntry {
   const { material, thickness, rest } = bond;
   const soft = temperature > (glassTransition(material) ?? Infinity);
-  return stackEntry(
+  const made = stackEntry(
     {
       thickness: thickness.value,
       youngsModulus: material.effectiveModulus.value * (soft ? SOFT_SHARE : 1),
@@ -29,11 +30,12 @@ function adhesiveEntry(bond: BondState, temperature: number): StackEntry {
     },
     material.name,
   );
+  return unequalEntry(made, rest?.unequal?.adhesive);
 }
 
 function carrierEntry(bond: BondState): StackEntry {
   const { carrier, rest } = bond;
-  return stackEntry(
+  const made = stackEntry(
     {
       thickness: carrier.thickness.value,
       youngsModulus: carrier.youngsModulus.value,
@@ -44,6 +46,15 @@ function carrierEntry(bond: BondState): StackEntry {
     },
     carrier.name,
   );
+  return unequalEntry(made, rest?.unequal?.carrier);
+}
+
+/** The layer with further free strain along x and along y, as the stress that stands for it. */
+function unequalEntry(entry: StackEntry, strain: { x: number; y: number } | undefined): StackEntry {
+  if (!strain) return entry;
+  const { stated } = entry;
+  const taken = applyStiffness(isotropicStiffness(stated.youngsModulus, stated.poissonsRatio), { ...strain, xy: 0 });
+  return { ...entry, directional: { ...stated, stress: { x: -taken.x, y: -taken.y } } };
 }
 
 /** The carrier by itself, as a plate that slides on the wafer. */
@@ -76,11 +87,12 @@ function putFilm(film: FilmState | undefined, entries: StackEntry[], films: Laye
 }
 
 /** Whether a state bends differently along x and y. */
-export function bendsUnequally({ incoming, front, back }: WaferState): boolean {
+export function bendsUnequally({ incoming, front, back, bond }: WaferState): boolean {
   const unequal =
     incoming !== null && (incoming.film.x !== incoming.film.y || incoming.crystal.x !== incoming.crystal.y);
   return (
     unequal ||
+    bond?.rest?.unequal !== undefined ||
     front.some(({ addition }) => isDirectional(addition)) ||
     back.some(({ addition }) => isDirectional(addition))
   );

@@ -4,9 +4,10 @@ import { letFlow, placeLayers, type PlacedLayers } from "../laminate/placed-laye
 import { balanceLayers, type LaminateBalance } from "../laminate/solve-laminate.ts";
 import { noteBounds } from "./film-limits.ts";
 import { locked, slides } from "./bond.ts";
-import { carrierPlate, layersOf, type LayerStack } from "./layers.ts";
+import { bendsUnequally, carrierPlate, layersOf, type LayerStack } from "./layers.ts";
 import type { StackEntry } from "./stack-entry.ts";
 import type { FilmState, WaferState } from "./state.ts";
+import { strainApart } from "./unequal.ts";
 
 /** A stack at a temperature, its layers at their heights with what they have flowed. */
 export interface PlacedStack extends LayerStack {
@@ -106,15 +107,26 @@ function renewed(film: FilmState, temperature: number, flowed: number | undefine
 
 /**
  * The wafer of a sliding pair once it has cooled to its flow point and locks in the shape that it has there: flat where a tool
- * holds it flat.
+ * holds it flat. Where its directions differ each locks as it lies; a twist alone is lost.
  */
-export function lockedState({ state, placed, solution, temperature }: Settled, flat: boolean): WaferState {
+export function lockedState(settled: Settled, flat: boolean): WaferState {
+  const { state, placed, solution, temperature } = settled;
   if (!state.bond) return state;
   const { midplaneStrain, curvature, neutralPlane } = solution;
   const top = placed.total / 2;
   const adhesive = top + state.bond.thickness.value / 2;
   const carrier = top + state.bond.thickness.value + state.bond.carrier.thickness.value / 2;
   const strainAt = (z: number) => midplaneStrain - curvature * (flat ? neutralPlane : z);
-  const bond = locked(state.bond, temperature, { adhesive: strainAt(adhesive), carrier: strainAt(carrier) });
+  const apart = bendsUnequally(state) ? strainApart(settled, flat) : null;
+  const beyond = (z: number) => {
+    const { x = 0, y = 0 } = apart?.(z) ?? {};
+    return { x: x - strainAt(z), y: y - strainAt(z) };
+  };
+  const bond = locked(
+    state.bond,
+    temperature,
+    { adhesive: strainAt(adhesive), carrier: strainAt(carrier) },
+    apart && { adhesive: beyond(adhesive), carrier: beyond(carrier) },
+  );
   return { ...state, bond };
 }
