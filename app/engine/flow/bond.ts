@@ -1,3 +1,4 @@
+import type { PlaneTensor } from "../directional/plane-stiffness.ts";
 import { ROOM_TEMPERATURE } from "../laminate/layer.ts";
 import { siliconThermalStrain } from "../silicon/expansion.ts";
 import type { BondingMaterialInput, BondInput } from "./model.ts";
@@ -9,8 +10,8 @@ export interface BondRest {
   /** strain of adhesive and carrier beyond that of flat, free silicon at that temperature */
   adhesiveStrain: number;
   carrierStrain: number;
-  /** what the strain along x and along y is beyond that, of a wafer whose directions differ */
-  unequal?: PairStrain<{ x: number; y: number }>;
+  /** what the strain by direction is beyond that, of a wafer whose directions differ */
+  unequal?: PairStrain<PlaneTensor>;
 }
 
 /** Strain at the middles of adhesive and carrier. */
@@ -53,7 +54,7 @@ export function lockTemperature({ rest, material, bondTemperature }: BondState):
 
 /**
  * The bond locked at a temperature (K) in the shape that the sliding pair has there: `strain` of the wafer, continued to the
- * middles of adhesive and carrier, against flat silicon at 25 °C, and `unequal` what it is along x and y beyond that. Curvature goes into that of the adhesive as its middle alone, which leaves out its own bending stiffness, a millionth of the
+ * middles of adhesive and carrier, against flat silicon at 25 °C, and `unequal` what it is by direction beyond that. Curvature goes into that of the adhesive as its middle alone, which leaves out its own bending stiffness, a millionth of the
  * pair's.
  */
 export function locked(

@@ -1,5 +1,5 @@
 import type { DirectionalLayer } from "../directional/layer.ts";
-import { applyStiffness, isotropicStiffness } from "../directional/plane-stiffness.ts";
+import type { PlaneTensor } from "../directional/plane-stiffness.ts";
 import { glassTransition, lockTemperature, type BondState } from "./bond.ts";
 import { carrierExpansion } from "./carrier-expansion.ts";
 import { isDirectional } from "./film-entry.ts";
@@ -49,12 +49,9 @@ function carrierEntry(bond: BondState): StackEntry {
   return unequalEntry(made, rest?.unequal?.carrier);
 }
 
-/** The layer with further free strain along x and along y, as the stress that stands for it. */
-function unequalEntry(entry: StackEntry, strain: { x: number; y: number } | undefined): StackEntry {
-  if (!strain) return entry;
-  const { stated } = entry;
-  const taken = applyStiffness(isotropicStiffness(stated.youngsModulus, stated.poissonsRatio), { ...strain, xy: 0 });
-  return { ...entry, directional: { ...stated, stress: { x: -taken.x, y: -taken.y } } };
+/** The layer with further free strain by direction. */
+function unequalEntry(entry: StackEntry, freeStrain: PlaneTensor | undefined): StackEntry {
+  return freeStrain ? { ...entry, directional: { ...entry.stated, freeStrain } } : entry;
 }
 
 /** The carrier by itself, as a plate that slides on the wafer. */

@@ -1,6 +1,6 @@
 import { ROOM_TEMPERATURE } from "../laminate/layer.ts";
 import { formatQuantity } from "../units/format.ts";
-import { lockTemperature, slides } from "./bond.ts";
+import { lockTemperature } from "./bond.ts";
 import { knownBetween } from "./carrier-expansion.ts";
 import { bendsUnequally } from "./layers.ts";
 import type { FlowInput, StepInput } from "./model.ts";
@@ -18,7 +18,6 @@ export function stepRemarks(flow: FlowInput, number: number, step: StepInput, af
     ...beyondKnownExpansion(step, after),
     ...incomingTakenAsFilm(flow, number),
     ...flowsByMean(step, after),
-    ...losesTwist(step, after),
   ];
 }
 
@@ -57,17 +56,5 @@ function flowsByMean({ peakTemperature }: StepInput, after: WaferState): string[
   if (!yielded || peakTemperature <= ROOM_TEMPERATURE || !bendsUnequally(after)) return [];
   return [
     "Metal yields here by the mean of both directions: along and across, the curvature can be off by a tenth of the larger one, the mean of both by 2 %.",
-  ];
-}
-
-/** Lines askew to x and y twist the wafer, and a pair that locks does not keep that. */
-function losesTwist({ peakTemperature }: StepInput, after: WaferState): string[] {
-  if (!after.bond?.rest?.unequal || !slides(after.bond, peakTemperature)) return [];
-  const askew = allFilms(after).some(
-    ({ addition: { pattern } }) => pattern?.kind === "lines" && Math.abs(Math.sin(2 * pattern.direction)) > 1e-9,
-  );
-  if (!askew) return [];
-  return [
-    "Lines askew to the flat or notch twist the wafer. The pair locks again without that twist, so what is said of its two axes is rough until it is debonded; the mean of both holds.",
   ];
 }

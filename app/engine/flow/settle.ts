@@ -107,7 +107,7 @@ function renewed(film: FilmState, temperature: number, flowed: number | undefine
 
 /**
  * The wafer of a sliding pair once it has cooled to its flow point and locks in the shape that it has there: flat where a tool
- * holds it flat. Where its directions differ each locks as it lies; a twist alone is lost.
+ * holds it flat. Where its directions differ each locks as it lies.
  */
 export function lockedState(settled: Settled, flat: boolean): WaferState {
   const { state, placed, solution, temperature } = settled;
@@ -119,8 +119,8 @@ export function lockedState(settled: Settled, flat: boolean): WaferState {
   const strainAt = (z: number) => midplaneStrain - curvature * (flat ? neutralPlane : z);
   const apart = bendsUnequally(state) ? strainApart(settled, flat) : null;
   const beyond = (z: number) => {
-    const { x = 0, y = 0 } = apart?.(z) ?? {};
-    return { x: x - strainAt(z), y: y - strainAt(z) };
+    const { x = 0, y = 0, xy = 0 } = apart?.(z) ?? {};
+    return { x: x - strainAt(z), y: y - strainAt(z), xy };
   };
   const bond = locked(
     state.bond,

@@ -50,13 +50,13 @@ export function unequalCurvature(
 }
 
 /**
- * Strain along x and y of a wafer in a sliding pair at a height over its middle (m), continued beyond its faces, against flat
+ * Strain of a wafer in a sliding pair, by direction, at a height over its middle (m), continued beyond its faces, against flat
  * silicon at 25 °C; the same at every height for one that is held `flat`.
  */
 export function strainApart(
   { temperature, slidingOn, ...stack }: PlacedStack & { temperature: number; slidingOn: StackEntry[] | null },
   flat: boolean,
-): (z: number) => { x: number; y: number } {
+): (z: number) => PlaneTensor {
   const wafer = solveDirectionalLaminate(flowedLayers(stack), { temperature });
   if (flat || !slidingOn) return () => wafer.flatStrain;
   const { curvatureX, curvatureY, twist } = sharedCurvature(wafer, plateAlone(slidingOn, temperature));
@@ -68,7 +68,7 @@ export function strainApart(
     xy: 2 * (twist - wafer.twist),
   };
   const middle = addTensor(wafer.midplaneStrain, stretching.solve(applyStiffness(wafer.couplingStiffness, added)));
-  return (z) => ({ x: middle.x - z * curvatureX, y: middle.y - z * curvatureY });
+  return (z) => ({ x: middle.x - z * curvatureX, y: middle.y - z * curvatureY, xy: middle.xy - 2 * z * twist });
 }
 
 function flowedLayers({ entries, placed }: PlacedStack): DirectionalLayer[] {
