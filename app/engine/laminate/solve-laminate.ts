@@ -73,20 +73,26 @@ export function solveLaminate(layersBottomToTop: readonly Layer[], o: LaminateOp
   const temperature = o.temperature ?? ROOM_TEMPERATURE;
   const placed = placeLayers(named, temperature);
   const balance = balanceLayers(placed, o.slidingOn ? solveLaminate(o.slidingOn, { temperature }) : undefined);
-  /** at a share of the layer's thickness above its middle */
-  const stresses = (share: number) =>
-    Array.from(placed.thickness, (thickness, n) => {
-      const z = (placed.centre[n] ?? 0) + share * thickness;
-      const strain = balance.midplaneStrain - balance.curvature * z - (placed.freeStrain[n] ?? 0);
-      return (placed.biaxialModulus[n] ?? 0) * strain;
-    });
-  return {
-    ...balance,
-    freeStrain: [...placed.freeStrain],
-    stressBottom: stresses(-0.5),
-    stressTop: stresses(0.5),
-    meanStress: stresses(0),
-  };
+  const result: LaminateResult = { ...balance, freeStrain: [], stressBottom: [], stressTop: [], meanStress: [] };
+  for (let n = 0; n < placed.count; n += 1) {
+    const half = (placed.thickness[n] ?? 0) / 2;
+    const centre = placed.centre[n] ?? 0;
+    result.freeStrain.push(placed.freeStrain[n] ?? 0);
+    result.stressBottom.push(stressAt(placed, n, centre - half, balance));
+    result.stressTop.push(stressAt(placed, n, centre + half, balance));
+    result.meanStress.push(stressAt(placed, n, centre, balance));
+  }
+  return result;
+}
+
+/** Stress in layer `n` itself at a height over the mid-plane (m), Pa. */
+function stressAt(
+  { biaxialModulus, freeStrain }: PlacedLayers,
+  n: number,
+  z: number,
+  { midplaneStrain, curvature }: LaminateBalance,
+): number {
+  return (biaxialModulus[n] ?? 0) * (midplaneStrain - curvature * z - (freeStrain[n] ?? 0));
 }
 
 /** A stack that takes the same curvature as another and slides on it. */
