@@ -20,18 +20,7 @@ import { defaultLimits } from "#app/engine/rules/limits.ts";
 import { lockedState, settle } from "#app/engine/flow/settle.ts";
 import { unequalCurvature } from "#app/engine/flow/unequal.ts";
 import { relative } from "../relative.ts";
-import {
-  addition,
-  adhesive,
-  bondStep,
-  carrier,
-  celsius,
-  exact,
-  film,
-  flow,
-  step,
-  um,
-} from "../unit/flow-samples.ts";
+import { addition, adhesive, bondStep, carrier, celsius, exact, film, flow, step, um } from "../unit/flow-samples.ts";
 
 const COPPER = { youngsModulus: 117e9, poissonsRatio: 0.34, cte: 16.7e-6 };
 const THICKNESS = um(5);
