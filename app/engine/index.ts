@@ -146,6 +146,14 @@ export { solveFor, type InverseAnswer, type InverseQuestion, type NoAnswer } fro
 export { answerInWords, type Wording } from "./inverse/words.ts";
 export { balancingFilm, leastThickness, mostFilm, type Balance, type FilmQuantity } from "./inverse/stack-questions.ts";
 export { carrierExpansionFor, sagittaAfter, sagittasAfter } from "./inverse/flow-questions.ts";
+export {
+  balancingFilmWorking,
+  carrierExpansionWorking,
+  curlingThicknessWorking,
+  leastThicknessWorking,
+  mostFilmWorking,
+} from "./inverse/working.ts";
+export { calibrationWorkings } from "./calibration/working.ts";
 export { calibratePair, type Calibration, type CalibratedValue } from "./calibration/calibrate-pair.ts";
 export { withCalibration, type Calibrated, type PairMeasurement } from "./calibration/pair-model.ts";
 

@@ -1,5 +1,5 @@
 import { memory, type Source } from "./sources/source.ts";
-import { UNCERTAINTY_SOURCES } from "./sources/uncertainty.ts";
+import { STATISTICS } from "./sources/statistics.ts";
 
 export type { Source, SourceBasis } from "./sources/source.ts";
 
@@ -327,7 +327,7 @@ export const SOURCES = {
     place: "balance of forces of each plate and of the moments of both",
     basis: "own derivation",
   },
-  ...UNCERTAINTY_SOURCES,
+  ...STATISTICS,
   "common-practice": {
     author: "the trade",
     title: "Common practice in wafer handling",

@@ -19,6 +19,8 @@ type Written = DirectionalLayer | { times: number; of: DirectionalLayer[] };
 interface Stack {
   temperature: number;
   layers: Written[];
+  /** a second stack on top that slides on the first; both plain */
+  slidingOn?: Written[];
 }
 
 interface Cases {
@@ -40,10 +42,12 @@ function isPlain(layer: DirectionalLayer): layer is Layer {
 }
 
 /** Curvatures (x, y, twist), strain of the middle plane and stress per layer, lower and upper face, in all three parts. */
-function solveStack({ layers, temperature }: Stack) {
+function solveStack({ layers, temperature, slidingOn }: Stack) {
   const stack = expand(layers);
-  if (stack.every(isPlain)) {
-    const { curvature, midplaneStrain, stressBottom, stressTop } = solveLaminate(stack, { temperature });
+  const top = expand(slidingOn ?? []);
+  if (stack.every(isPlain) && top.every(isPlain)) {
+    const options = slidingOn ? { temperature, slidingOn: top } : { temperature };
+    const { curvature, midplaneStrain, stressBottom, stressTop } = solveLaminate(stack, options);
     const both = (value: number) => [value, value, 0];
     return {
       curvature: both(curvature),

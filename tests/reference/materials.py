@@ -30,6 +30,22 @@ def silicon_expansion(kelvin: float) -> float:
     return (3.725 * (1 - exp(-5.88e-3 * (kelvin - 124))) + 5.548e-4 * kelvin) * 1e-6
 
 
+def along_curve(curve: dict[str, Any], start: float, end: float) -> float:
+    """
+    Strain along a stated curve, by quadrature: points joined by straight lines, or a polynomial in K. Both ends lie inside.
+    """
+
+    def alpha(kelvin: float) -> float:
+        if curve["kind"] == "polynomial":
+            return float(np.polyval(curve["terms"][::-1], kelvin))
+        return float(np.interp(kelvin, curve["temperatures"], curve["coefficients"]))
+
+    # Kinks are told to the quadrature, which would miss them else.
+    kinks = [t for t in curve.get("temperatures", []) if min(start, end) < t < max(start, end)]
+    strain = float(quad(alpha, start, end, points=kinks or None, epsabs=0, epsrel=1e-12)[0])
+    return strain + curve.get("shift", 0.0) * (end - start)
+
+
 def thermal_strain(layer: Layer, start: float, end: float) -> float:
     """Strain of an unhindered layer from `start` to `end` (K), by quadrature for silicon."""
     if start == end:
@@ -37,6 +53,8 @@ def thermal_strain(layer: Layer, start: float, end: float) -> float:
     alpha = layer.get("cte", "silicon" if "silicon" in layer else None)
     if alpha == "silicon":
         return float(quad(silicon_expansion, start, end, epsabs=0, epsrel=1e-12)[0])
+    if isinstance(alpha, dict):
+        return along_curve(alpha, start, end)
     if alpha is None:
         raise ValueError(f"an expansion is needed from {start} K to {end} K")
     return float(alpha) * (end - start)

@@ -36,8 +36,12 @@ def expanded(layers: list[Layer]) -> list[Layer]:
 
 
 def laminate_rows(case: Case, engine: Case) -> list[Row]:
-    """Curvatures, strain and stresses of a stack against the 6 by 6 system."""
-    outside = laminates.solve(expanded(case["layers"]), case["temperature"])
+    """Curvatures, strain and stresses of a stack against the 6 by 6 system, of a pair that slides against the 9 by 9 one."""
+    layers, temperature = expanded(case["layers"]), case["temperature"]
+    if "slidingOn" in case:
+        outside = laminates.solve_sliding(layers, expanded(case["slidingOn"]), temperature)
+    else:
+        outside = laminates.solve(layers, temperature)
     rows = [
         ("curvature, 1/m", [engine["curvature"]], [outside.curvature]),
         ("mid-plane strain", [engine["midplaneStrain"]], [outside.midplane_strain]),

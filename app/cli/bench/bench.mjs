@@ -1,7 +1,10 @@
 /**
- * `npm run bench`: how fast the engine samples, against NumPy doing the same in the same run, and how long a chart's sweep and a
- * flow's sampling take. Prints a table; fails nothing, since times depend on the machine and what else it does.
+ * `npm run bench`: how fast the engine samples, against NumPy doing the same in the same run, how long a chart's sweep, a flow's
+ * sampling, walk and assessment take, and how large the part is that runs in the browser. Prints a table; fails nothing, since times depend on the machine and what else it does.
  */
+import { assessFlow } from "../../engine/flow/assess.ts";
+import { walkFlow } from "../../engine/flow/walk.ts";
+import { defaultLimits } from "../../engine/rules/limits.ts";
 import { thicknessSweep } from "../../engine/stack/thickness-sweep.ts";
 import { BLOCK, plainDrawing } from "../../engine/uncertainty/drawing.ts";
 import { laminateModel } from "../../engine/uncertainty/laminate-model.ts";
@@ -10,7 +13,9 @@ import { stepsSampling } from "../../engine/uncertainty/sample-steps.ts";
 import { sampleUncertainty, sampling } from "../../engine/uncertainty/sample-uncertainty.ts";
 import { shapeCurve } from "../../engine/uncertainty/shape-curve.ts";
 import { sourcesOf } from "../../engine/uncertainty/sources.ts";
+import { liveBundle } from "./bundle.mjs";
 import { inputsOf, stackOf, uncertaintiesOf } from "./cases.mjs";
+import { metalFlow } from "./flows.mjs";
 import { needNumpy, numpyLaminate } from "./numpy.mjs";
 import { scatter, shortest, slope } from "./timing.mjs";
 
@@ -194,6 +199,31 @@ function flow() {
   console.log(`Growth of time (1 is linear): layers ${layersSlope}, steps ${stepsSlope}, draws ${drawsSlope}`);
 }
 
+function walks() {
+  const limits = defaultLimits();
+  const ms = (seconds) => `${(1e3 * seconds).toFixed(1)} ms`;
+  const usual = metalFlow({ steps: 25, films: 11, together: 1 });
+  const walk = shortest(100, () => walkFlow(usual, limits));
+  console.log(`Walk of 25 steps, 12 layers, metals that yield: ${ms(walk)} (wanted 2 ms)`);
+  const assess = shortest(10, () => assessFlow(usual, limits));
+  console.log(`Assessment of the same with its uncertainties, 56 inputs: ${ms(assess)}`);
+  const most = metalFlow({ steps: 12, films: 60, together: 10 });
+  const heavy = shortest(3, () => assessFlow(most, limits));
+  console.log(
+    `Assessment of 12 steps and 60 metals that all yield, 301 inputs: ${ms(heavy)} (wanted well under 1000 ms)`,
+  );
+}
+
+async function size() {
+  const { gzip, plain, packages } = await liveBundle();
+  const kB = (bytes) => `${(bytes / 1e3).toFixed(1)} kB`;
+  console.log(
+    `Live part in the browser (estimate, sweep, assessment, units, limits): ${kB(gzip)} gzip (wanted 60 kB), ${kB(plain)} plain, ${(100 * packages).toFixed(0)} % of it packages`,
+  );
+}
+
 compare();
 sweep();
 flow();
+walks();
+await size();

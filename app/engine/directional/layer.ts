@@ -6,6 +6,7 @@ import { patternStiffness } from "../patterned/pattern-stiffness.ts";
 import { siliconDirectionalConstants } from "../silicon/plane-constants.ts";
 import { factor } from "./factor.ts";
 import {
+  addTensor,
   isotropicStiffness,
   siliconPlaneStiffness,
   turnStiffness,
@@ -19,6 +20,8 @@ export interface DirectionalFilm extends Layer {
   silicon?: undefined;
   /** In place of `coverage`, never with it. */
   pattern?: FilmPattern;
+  /** Free strain besides those of temperature, stress and yielding, where it differs by direction. */
+  freeStrain?: PlaneTensor;
 }
 
 /** Silicon (001) with its cubic stiffness. Its expansion is silicon's unless another is given. */
@@ -42,7 +45,7 @@ export interface CheckedDirectionalLayer {
   stiffness: PlaneStiffness;
   /** Share of the area, 0 to 1. */
   coverage: number;
-  /** Free strain that the stress stands for, −S σ with the compliance S of the unpatterned layer. */
+  /** Free strain that the stress stands for, −S σ with the compliance S of the unpatterned layer, and what is stated besides. */
   stressStrain: PlaneTensor;
 }
 
@@ -68,7 +71,7 @@ export function checkDirectionalLayer(layer: DirectionalLayer, field: string): C
   const base = checkLayer({ ...layer, stress: 0 }, field);
   const { youngsModulus, poissonsRatio } = layer;
   const blanket = isotropicStiffness(youngsModulus, poissonsRatio);
-  const stressStrain = strainOfStress(blanket, stress, field);
+  const stressStrain = addTensor(strainOfStress(blanket, stress, field), checkFreeStrain(layer.freeStrain, field));
   if (layer.pattern === undefined) return { base, stiffness: blanket, coverage: base.coverage, stressStrain };
   if (layer.coverage !== undefined) {
     throw new EngineInputError(`${field}.coverage`, "is given twice: the pattern has its own");
@@ -85,6 +88,12 @@ function checkStress(stress: Layer["stress"], field: string): { x: number; y: nu
     return { x: both, y: both };
   }
   return { x: requireStress(`${field}.stress.x`, stress.x), y: requireStress(`${field}.stress.y`, stress.y) };
+}
+
+function checkFreeStrain(strain: PlaneTensor | undefined, field: string): PlaneTensor {
+  if (strain === undefined) return { x: 0, y: 0, xy: 0 };
+  const part = (name: keyof PlaneTensor) => requireWithin(`${field}.freeStrain.${name}`, strain[name], -1, 1, "1");
+  return { x: part("x"), y: part("y"), xy: part("xy") };
 }
 
 function strainOfStress(stiffness: PlaneStiffness, { x, y }: { x: number; y: number }, field: string): PlaneTensor {

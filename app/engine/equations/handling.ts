@@ -27,4 +27,19 @@ export const HANDLING = {
     range: "Each tool holds two limits, edges up and edges down.",
     sources: ["common-practice", "semi-mf1390"],
   },
+  "inverse-question": {
+    title: "Input at which a figure takes a value",
+    formula: "f(x) = f_0, the x nearest to x_1 between x_1 and x_2",
+    symbols: [
+      { symbol: "f", meaning: "figure of the full model, such as the warp, in its own unit", unit: "1" },
+      { symbol: "x", meaning: "input that is sought, in its own unit", unit: "1" },
+      { symbol: "f_0", meaning: "value that the figure takes, such as a limit", unit: "1" },
+      { symbol: "x_1", meaning: "where the search begins; it ends at x_2", unit: "1" },
+    ],
+    range:
+      "Every other input as stated. The answer put back gives the value far better than to 0.1 %; two answers between neighbouring places of the search are found unless the figure turns twice there.",
+    sources: ["inverse-questions"],
+    caution:
+      "A figure that is not monotone has further answers, which are named; a wafer that has begun to roll follows another branch.",
+  },
 } as const satisfies Record<string, Equation>;

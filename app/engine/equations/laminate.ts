@@ -55,6 +55,18 @@ export const LAMINATE = {
       "An adhesive above its flow point: no shear between the plates, no gap. On cooling the pair locks at the flow point in the state found there.",
     sources: ["sliding-pair"],
   },
+  "balancing-film": {
+    title: "Back-side film that makes the wafer flat",
+    formula: "κ(h_b) = 0 at T",
+    symbols: [
+      { symbol: "κ", meaning: "curvature of the stack with the film, positive for a bowl", unit: "1/m" },
+      { symbol: "h_b", meaning: "thickness of the outermost back-side film", unit: "m" },
+      { symbol: "T", meaning: "temperature at which the wafer is flat", unit: "K" },
+    ],
+    range: "Elastic films. At other temperatures a bow is left wherever the films expand differently.",
+    sources: ["inverse-questions"],
+    caution: "Balanced moments leave the stresses: a flat wafer is not a wafer without stress.",
+  },
   "effective-thickness": {
     title: "Effective thickness of a stack",
     formula: "h_eff = sqrt(12 D / A)",

@@ -64,6 +64,21 @@ export const METROLOGY = {
     ],
     caution: "It is as good as the distributions of the inputs; a tolerance alone is taken as rectangular.",
   },
+  "pair-calibration": {
+    title: "Locked-in modulus and carrier expansion from measured pairs",
+    formula: "χ^2 = Σ ((s_k − f_k(p)) / u_k)^2 least, u(p) from (J^T J)^(-1), J_kj = (df_k/dp_j) / u_k",
+    symbols: [
+      { symbol: "χ", meaning: "misfit; χ^2 is near the degrees of freedom when the u_k are honest", unit: "1" },
+      { symbol: "s_k", meaning: "sagitta measured at 25 °C after a step, sign of the curvature", unit: "m" },
+      { symbol: "f_k", meaning: "the same by the full walk of the flow", unit: "m" },
+      { symbol: "u_k", meaning: "standard uncertainty of s_k", unit: "m" },
+      { symbol: "p", meaning: "what is sought: logarithm of the locked-in modulus, carrier expansion", unit: "1" },
+    ],
+    range:
+      "Same bonding material and carrier in all pairs, independent errors. Refused while a value stays open: a modulus not known to a factor of two, an expansion not to 1 ppm/K, or both changing the bows alike.",
+    sources: ["levenberg-1944", "marquardt-1963", "gum-supplement-2-2011"],
+    caution: "All other inputs count as exact: what is wrong with them goes into the values.",
+  },
   "lot-share": {
     title: "Share of a lot's wafers beyond a limit",
     formula: "P(c) = share of w with f(c, w) > L, u^2(P) = var of P(c) over c",

@@ -1,3 +1,4 @@
+import type { PlaneTensor } from "../directional/plane-stiffness.ts";
 import { ROOM_TEMPERATURE } from "../laminate/layer.ts";
 import { siliconThermalStrain } from "../silicon/expansion.ts";
 import type { BondingMaterialInput, BondInput } from "./model.ts";
@@ -9,6 +10,14 @@ export interface BondRest {
   /** strain of adhesive and carrier beyond that of flat, free silicon at that temperature */
   adhesiveStrain: number;
   carrierStrain: number;
+  /** what the strain by direction is beyond that, of a wafer whose directions differ */
+  unequal?: PairStrain<PlaneTensor>;
+}
+
+/** Strain at the middles of adhesive and carrier. */
+export interface PairStrain<Strain = number> {
+  adhesive: Strain;
+  carrier: Strain;
 }
 
 /** A bond as it is: what joins the pair, the temperature at which it was made, and how it has locked since. */
@@ -45,11 +54,21 @@ export function lockTemperature({ rest, material, bondTemperature }: BondState):
 
 /**
  * The bond locked at a temperature (K) in the shape that the sliding pair has there: `strain` of the wafer, continued to the
- * middles of adhesive and carrier, against flat silicon at 25 °C. Curvature goes into that of the adhesive as its middle alone,
- * which leaves out its own bending stiffness, a millionth of the pair's.
+ * middles of adhesive and carrier, against flat silicon at 25 °C, and `unequal` what it is by direction beyond that. Curvature goes into that of the adhesive as its middle alone, which leaves out its own bending stiffness, a millionth of the
+ * pair's.
  */
-export function locked(bond: BondState, temperature: number, strain: { adhesive: number; carrier: number }): BondState {
+export function locked(
+  bond: BondState,
+  temperature: number,
+  strain: PairStrain,
+  unequal: BondRest["unequal"] | null = null,
+): BondState {
   const silicon = siliconThermalStrain(ROOM_TEMPERATURE, temperature);
-  const rest = { temperature, adhesiveStrain: strain.adhesive - silicon, carrierStrain: strain.carrier - silicon };
+  const rest: BondRest = {
+    temperature,
+    adhesiveStrain: strain.adhesive - silicon,
+    carrierStrain: strain.carrier - silicon,
+    ...(unequal ? { unequal } : {}),
+  };
   return { ...bond, rest };
 }

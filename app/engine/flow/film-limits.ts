@@ -1,6 +1,5 @@
 import { ROOM_TEMPERATURE } from "../laminate/layer.ts";
-import type { StressBound } from "../laminate/bounded-stress.ts";
-import type { PlacedLayer } from "../laminate/placed-layers.ts";
+import type { StressBounds } from "../laminate/bounded-stress.ts";
 import { yieldShare } from "./film-entry.ts";
 import type { FilmAddition } from "./model.ts";
 
@@ -12,19 +11,26 @@ export function yieldStress(atRoom: number, temperature: number): number {
   return atRoom * Math.max(0, 1 - (temperature - ROOM_TEMPERATURE) / YIELD_FALLS_TO_ZERO_OVER);
 }
 
-/** Least and most mean stress that a film carries at a temperature (K), Pa; null for one that stays elastic. */
-export function stressBound(
+/**
+ * Notes the least and most mean stress, Pa, that a film carries at a temperature (K) as that of layer `at`; false for one that
+ * stays elastic, which is left as it is.
+ */
+export function noteBounds(
   addition: FilmAddition,
-  layer: PlacedLayer,
-  temperature: number,
-  metalHistory: boolean,
-): StressBound | null {
+  { temperature, metalHistory }: { temperature: number; metalHistory: boolean },
+  bounds: StressBounds,
+  at: number,
+): boolean {
   const { film } = addition;
   if (film.kind === "polymer") {
     const soft = temperature >= (film.zeroStressTemperature?.value ?? Infinity);
-    return { layer, low: 0, high: soft ? 0 : Infinity };
+    bounds.low[at] = 0;
+    bounds.high[at] = soft ? 0 : Infinity;
+    return true;
   }
-  if (film.kind !== "metal" || film.yieldStress === null || !metalHistory) return null;
+  if (film.kind !== "metal" || film.yieldStress === null || !metalHistory) return false;
   const limit = yieldStress(film.yieldStress.value, temperature) * yieldShare(addition);
-  return { layer, low: -limit, high: limit };
+  bounds.low[at] = -limit;
+  bounds.high[at] = limit;
+  return true;
 }

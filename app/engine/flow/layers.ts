@@ -1,4 +1,5 @@
 import type { DirectionalLayer } from "../directional/layer.ts";
+import type { PlaneTensor } from "../directional/plane-stiffness.ts";
 import { glassTransition, lockTemperature, type BondState } from "./bond.ts";
 import { carrierExpansion } from "./carrier-expansion.ts";
 import { isDirectional } from "./film-entry.ts";
@@ -18,7 +19,7 @@ const SOFT_SHARE = 0.01;
 function adhesiveEntry(bond: BondState, temperature: number): StackEntry {
   const { material, thickness, rest } = bond;
   const soft = temperature > (glassTransition(material) ?? Infinity);
-  return stackEntry(
+  const made = stackEntry(
     {
       thickness: thickness.value,
       youngsModulus: material.effectiveModulus.value * (soft ? SOFT_SHARE : 1),
@@ -29,11 +30,12 @@ function adhesiveEntry(bond: BondState, temperature: number): StackEntry {
     },
     material.name,
   );
+  return unequalEntry(made, rest?.unequal?.adhesive);
 }
 
 function carrierEntry(bond: BondState): StackEntry {
   const { carrier, rest } = bond;
-  return stackEntry(
+  const made = stackEntry(
     {
       thickness: carrier.thickness.value,
       youngsModulus: carrier.youngsModulus.value,
@@ -44,6 +46,12 @@ function carrierEntry(bond: BondState): StackEntry {
     },
     carrier.name,
   );
+  return unequalEntry(made, rest?.unequal?.carrier);
+}
+
+/** The layer with further free strain by direction. */
+function unequalEntry(entry: StackEntry, freeStrain: PlaneTensor | undefined): StackEntry {
+  return freeStrain ? { ...entry, directional: { ...entry.stated, freeStrain } } : entry;
 }
 
 /** The carrier by itself, as a plate that slides on the wafer. */
@@ -53,28 +61,35 @@ export function carrierPlate(bond: BondState): StackEntry[] {
 
 /** The laminate of a state at a temperature (K), with or without the carrier that it is bonded to. */
 export function layersOf(state: WaferState, temperature: number, options: { carrier: boolean }): LayerStack {
+  const { back, siliconEntries, front, bond } = state;
   const entries: StackEntry[] = [];
   const films: LayerStack["films"] = [];
-  const put = (entry: StackEntry, film: FilmState | null) => {
-    entries.push(entry);
-    films.push(film);
-  };
-  for (const film of state.back.toReversed()) put(film.entry, film);
-  for (const silicon of state.siliconEntries) put(silicon, null);
-  for (const film of state.front) put(film.entry, film);
-  if (options.carrier && state.bond) {
-    put(adhesiveEntry(state.bond, temperature), null);
-    put(carrierEntry(state.bond), null);
+  for (let n = back.length - 1; n >= 0; n -= 1) putFilm(back[n], entries, films);
+  for (const silicon of siliconEntries) {
+    entries.push(silicon);
+    films.push(null);
+  }
+  for (const film of front) putFilm(film, entries, films);
+  if (options.carrier && bond) {
+    entries.push(adhesiveEntry(bond, temperature), carrierEntry(bond));
+    films.push(null, null);
   }
   return { entries, films };
 }
 
+function putFilm(film: FilmState | undefined, entries: StackEntry[], films: LayerStack["films"]): void {
+  if (!film) return;
+  entries.push(film.entry);
+  films.push(film);
+}
+
 /** Whether a state bends differently along x and y. */
-export function bendsUnequally({ incoming, front, back }: WaferState): boolean {
+export function bendsUnequally({ incoming, front, back, bond }: WaferState): boolean {
   const unequal =
     incoming !== null && (incoming.film.x !== incoming.film.y || incoming.crystal.x !== incoming.crystal.y);
   return (
     unequal ||
+    bond?.rest?.unequal !== undefined ||
     front.some(({ addition }) => isDirectional(addition)) ||
     back.some(({ addition }) => isDirectional(addition))
   );

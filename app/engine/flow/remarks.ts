@@ -2,8 +2,9 @@ import { ROOM_TEMPERATURE } from "../laminate/layer.ts";
 import { formatQuantity } from "../units/format.ts";
 import { lockTemperature } from "./bond.ts";
 import { knownBetween } from "./carrier-expansion.ts";
+import { bendsUnequally } from "./layers.ts";
 import type { FlowInput, StepInput } from "./model.ts";
-import type { WaferState } from "./state.ts";
+import { allFilms, type WaferState } from "./state.ts";
 
 /** Ranges start at 20, 25 or 30 °C without meaning a difference, K (common practice, no source). */
 const RANGE_SLACK = 5;
@@ -16,6 +17,7 @@ export function stepRemarks(flow: FlowInput, number: number, step: StepInput, af
     ...unstatedFlowPoint(step, after),
     ...beyondKnownExpansion(step, after),
     ...incomingTakenAsFilm(flow, number),
+    ...flowsByMean(step, after),
   ];
 }
 
@@ -45,5 +47,14 @@ function incomingTakenAsFilm({ wafer: { incoming } }: FlowInput, number: number)
   if (number !== 1 || !incoming || incoming.filmShare !== null) return [];
   return [
     "Nobody said which part of the incoming shape films cause: all of it is taken as film, which grows as 1/h^2 when the wafer is thinned.",
+  ];
+}
+
+/** Yielding by the mean of both directions; its error is measured at `unequalCurvature`. */
+function flowsByMean({ peakTemperature }: StepInput, after: WaferState): string[] {
+  const yielded = allFilms(after).some(({ plasticStrain }) => plasticStrain !== 0);
+  if (!yielded || peakTemperature <= ROOM_TEMPERATURE || !bendsUnequally(after)) return [];
+  return [
+    "Metal yields here by the mean of both directions: along and across, the curvature can be off by a tenth of the larger one, the mean of both by 2 %.",
   ];
 }

@@ -1,16 +1,17 @@
-import { flowStrains, type StressBound } from "../laminate/bounded-stress.ts";
+import { flowStrains, type StressBounds } from "../laminate/bounded-stress.ts";
 import type { Layer } from "../laminate/layer.ts";
-import { letFlow, placeLayers, type PlacedLayer } from "../laminate/placed-layers.ts";
+import { letFlow, placeLayers, type PlacedLayers } from "../laminate/placed-layers.ts";
 import { balanceLayers, type LaminateBalance } from "../laminate/solve-laminate.ts";
-import { stressBound } from "./film-limits.ts";
+import { noteBounds } from "./film-limits.ts";
 import { locked, slides } from "./bond.ts";
-import { carrierPlate, layersOf, type LayerStack } from "./layers.ts";
+import { bendsUnequally, carrierPlate, layersOf, type LayerStack } from "./layers.ts";
 import type { StackEntry } from "./stack-entry.ts";
 import type { FilmState, WaferState } from "./state.ts";
+import { strainApart } from "./unequal.ts";
 
 /** A stack at a temperature, its layers at their heights with what they have flowed. */
 export interface PlacedStack extends LayerStack {
-  placed: PlacedLayer[];
+  placed: PlacedLayers;
 }
 
 export interface Settled extends PlacedStack {
@@ -32,7 +33,7 @@ export interface SettleOptions {
 /** The layers of a stack with the strains that they have flowed, for a working. */
 export function statedLayers({ entries, placed }: PlacedStack): Layer[] {
   return entries.map(({ stated }, at) => {
-    const plasticStrain = placed[at]?.flowed ?? 0;
+    const plasticStrain = placed.flowed[at] ?? 0;
     return plasticStrain === 0 ? stated : { ...stated, plasticStrain };
   });
 }
@@ -49,21 +50,16 @@ export function settle(state: WaferState, temperature: number, { metalHistory, h
   const plate = slidingOn ? balanceLayers(placeLayers(slidingOn, temperature)) : undefined;
   const stack = placeStack(layersOf(state, temperature, { carrier: !sliding }), temperature);
   const { placed, films } = stack;
-  const bounds: StressBound[] = [];
-  films.forEach((film, at) => {
-    const layer = placed[at];
-    const bound = film && layer ? stressBound(film.addition, layer, temperature, metalHistory) : null;
-    if (bound) bounds.push(bound);
-  });
+  const bounds = boundsOf(films, { temperature, metalHistory });
   let solution = balanceLayers(placed, plate);
-  const strains = flowStrains(placed, bounds, solution, { heldFlat, slidingOn: plate });
+  const strains = bounds && flowStrains(placed, bounds, solution, { heldFlat, slidingOn: plate });
   if (strains) {
-    bounds.forEach(({ layer }, n) => letFlow(layer, strains[n] ?? 0));
+    strains.forEach((by, at) => letFlow(placed, at, by));
     solution = balanceLayers(placed, plate);
   }
-  const back = state.back.map((film, n) => renewed(film, temperature, placed[state.back.length - 1 - n]));
+  const back = state.back.map((film, n) => renewed(film, temperature, placed.flowed[state.back.length - 1 - n]));
   const firstFront = state.back.length + state.siliconEntries.length;
-  const front = state.front.map((film, n) => renewed(film, temperature, placed[firstFront + n]));
+  const front = state.front.map((film, n) => renewed(film, temperature, placed.flowed[firstFront + n]));
   return { ...stack, state: { ...state, back, front }, temperature, heldFlat, solution, slidingOn };
 }
 
@@ -71,42 +67,66 @@ export function settle(state: WaferState, temperature: number, { metalHistory, h
 export function placeStack(stack: LayerStack, temperature: number): PlacedStack {
   const placed = placeLayers(stack.entries, temperature);
   stack.films.forEach((film, at) => {
-    const layer = placed[at];
-    if (layer && film && film.plasticStrain !== 0) letFlow(layer, film.plasticStrain);
+    if (film && film.plasticStrain !== 0) letFlow(placed, at, film.plasticStrain);
   });
   return { ...stack, placed };
+}
+
+/** Limits of all layers; null when every one of them stays elastic. */
+function boundsOf(
+  films: LayerStack["films"],
+  options: { temperature: number; metalHistory: boolean },
+): StressBounds | null {
+  const bounds = { low: new Float64Array(films.length), high: new Float64Array(films.length) };
+  let some = false;
+  bounds.low.fill(-Infinity);
+  bounds.high.fill(Infinity);
+  films.forEach((film, at) => {
+    if (film && noteBounds(film.addition, options, bounds, at)) some = true;
+  });
+  return some ? bounds : null;
 }
 
 /** Mean stress of each film, Pa: as the stack lies by itself, or with its bending taken out by what holds it flat. */
 export function filmStresses({ placed, films, solution, heldFlat }: Settled): { film: FilmState; stress: number }[] {
   const { midplaneStrain, curvature, neutralPlane } = solution;
   return films.flatMap((film, at) => {
-    const layer = placed[at];
-    if (!film || !layer) return [];
-    const strain = midplaneStrain - curvature * (heldFlat ? neutralPlane : layer.centre);
-    return [{ film, stress: layer.biaxialModulus * (strain - layer.freeStrain) }];
+    if (!film) return [];
+    const strain = midplaneStrain - curvature * (heldFlat ? neutralPlane : (placed.centre[at] ?? 0));
+    return [{ film, stress: (placed.biaxialModulus[at] ?? 0) * (strain - (placed.freeStrain[at] ?? 0)) }];
   });
 }
 
 /** The film after it has been at a temperature: a metal keeps what it has flowed. The same object when nothing changed. */
-function renewed(film: FilmState, temperature: number, layer: PlacedLayer | undefined): FilmState {
+function renewed(film: FilmState, temperature: number, flowed: number | undefined): FilmState {
   const { addition, entry } = film;
-  const plasticStrain = addition.film.kind === "metal" && layer ? layer.flowed : film.plasticStrain;
+  const plasticStrain = addition.film.kind === "metal" ? (flowed ?? film.plasticStrain) : film.plasticStrain;
   if (plasticStrain === film.plasticStrain && temperature <= film.hottest) return film;
   return { addition, entry, plasticStrain, hottest: Math.max(film.hottest, temperature) };
 }
 
 /**
  * The wafer of a sliding pair once it has cooled to its flow point and locks in the shape that it has there: flat where a tool
- * holds it flat.
+ * holds it flat. Where its directions differ each locks as it lies.
  */
-export function lockedState({ state, placed, solution, temperature }: Settled, flat: boolean): WaferState {
+export function lockedState(settled: Settled, flat: boolean): WaferState {
+  const { state, placed, solution, temperature } = settled;
   if (!state.bond) return state;
   const { midplaneStrain, curvature, neutralPlane } = solution;
-  const top = placed.reduce((sum, { thickness }) => sum + thickness, 0) / 2;
+  const top = placed.total / 2;
   const adhesive = top + state.bond.thickness.value / 2;
   const carrier = top + state.bond.thickness.value + state.bond.carrier.thickness.value / 2;
   const strainAt = (z: number) => midplaneStrain - curvature * (flat ? neutralPlane : z);
-  const bond = locked(state.bond, temperature, { adhesive: strainAt(adhesive), carrier: strainAt(carrier) });
+  const apart = bendsUnequally(state) ? strainApart(settled, flat) : null;
+  const beyond = (z: number) => {
+    const { x = 0, y = 0, xy = 0 } = apart?.(z) ?? {};
+    return { x: x - strainAt(z), y: y - strainAt(z), xy };
+  };
+  const bond = locked(
+    state.bond,
+    temperature,
+    { adhesive: strainAt(adhesive), carrier: strainAt(carrier) },
+    apart && { adhesive: beyond(adhesive), carrier: beyond(carrier) },
+  );
   return { ...state, bond };
 }

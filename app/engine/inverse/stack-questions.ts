@@ -32,6 +32,20 @@ export function leastThickness(stack: StackInput, warpLimit: number, range: Thic
 /** What of a film is sought. */
 export type FilmQuantity = "thickness" | "stress";
 
+/** Place of a film in its stack, and what of it is sought. */
+export interface SoughtFilm {
+  at: number;
+  quantity: FilmQuantity;
+}
+
+/** The stack with one quantity of one film changed. */
+export function withFilm(stack: StackInput, film: SoughtFilm, value: number): StackInput {
+  return {
+    ...stack,
+    films: stack.films.map((one, n) => (n === film.at ? { ...one, [film.quantity]: value } : one)),
+  };
+}
+
 /**
  * Most of one film, by thickness (m) or by stress (Pa), that keeps the free wafer's warp within a limit (m), sought from `from`
  * to `to`. A film that first balances others has a first end at which the warp comes within the limit: `aboveAtFrom` is true
@@ -40,18 +54,14 @@ export type FilmQuantity = "thickness" | "stress";
  */
 export function mostFilm(
   stack: StackInput,
-  film: { at: number; quantity: FilmQuantity },
+  film: SoughtFilm,
   warpLimit: number,
   range: { from: number; to: number },
 ): InverseAnswer {
   if (!stack.films[film.at])
     throw new EngineInputError("film", "is not in the stack", `0 to ${stack.films.length - 1}`);
-  const withFilm = (value: number): StackInput => ({
-    ...stack,
-    films: stack.films.map((one, n) => (n === film.at ? { ...one, [film.quantity]: value } : one)),
-  });
   return solveFor({
-    model: (value) => warpOf(withFilm(value)),
+    model: (value) => warpOf(withFilm(stack, film, value)),
     ...range,
     target: requireLimit(warpLimit),
     samples: 160,
@@ -66,6 +76,14 @@ export interface Balance {
   residual: { temperature: number; sagitta: number }[];
 }
 
+/** A film that is to be put on the back side, its thickness left open. */
+export type BackFilm = Omit<StackFilm, "side" | "thickness">;
+
+/** The stack with an outermost back-side film of a thickness (m). */
+export function withBackFilm(stack: StackInput, film: BackFilm, thickness: number): StackInput {
+  return { ...stack, films: [...stack.films, { ...film, side: "back", thickness }] };
+}
+
 /**
  * Thickness of an outermost back-side film, m, that makes the free wafer flat at the stack's temperature, and the sagitta that is
  * left at `others` (K), where the films no longer balance.
@@ -73,17 +91,12 @@ export interface Balance {
  */
 export function balancingFilm(
   stack: StackInput,
-  film: Omit<StackFilm, "side" | "thickness">,
-  range: { thinnest: number; thickest: number },
+  film: BackFilm,
+  range: ThicknessRange,
   others: readonly number[] = [],
 ): Balance {
-  const withBack = (thickness: number, temperature = stack.temperature): StackInput => ({
-    ...stack,
-    temperature,
-    films: [...stack.films, { ...film, side: "back", thickness }],
-  });
   const answer = solveFor({
-    model: (thickness) => freeDisc(withBack(thickness)).disc.linearCurvature,
+    model: (thickness) => freeDisc(withBackFilm(stack, film, thickness)).disc.linearCurvature,
     from: range.thinnest,
     to: range.thickest,
     target: 0,
@@ -92,7 +105,7 @@ export function balancingFilm(
   if (answer.kind === "no answer") return { answer, residual: [] };
   const residual = others.map((temperature) => ({
     temperature,
-    sagitta: estimateStack(withBack(answer.value, temperature)).shape.bowMajor,
+    sagitta: estimateStack({ ...withBackFilm(stack, film, answer.value), temperature }).shape.bowMajor,
   }));
   return { answer, residual };
 }

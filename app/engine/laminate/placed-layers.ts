@@ -1,56 +1,82 @@
 import { EngineInputError } from "../errors.ts";
 import { freeStrain, type NamedLayer } from "./free-strain.ts";
 
-/** A checked layer at its height in a stack, with its free strain at one temperature. */
-export interface PlacedLayer {
-  thickness: number;
+/**
+ * Checked layers at their heights in a stack, bottom to top, with their free strains at one temperature: one column for each
+ * figure, because a flow places hundreds of thousands of layers and an object for each would cost more than the sums.
+ */
+export interface PlacedLayers {
+  count: number;
+  /** m */
+  thickness: Float64Array;
   /** Pa */
-  biaxialModulus: number;
+  biaxialModulus: Float64Array;
   /** Biaxial modulus times area fraction, Pa. */
-  coveredModulus: number;
-  /** The same times thickness, N/m. */
-  stiffness: number;
+  coveredModulus: Float64Array;
   /** Height of the layer's middle over the mid-plane of the stack, m. */
-  centre: number;
+  centre: Float64Array;
   /** In the middle of the layer, `flowed` in it. */
-  freeStrain: number;
+  freeStrain: Float64Array;
   /** Strain that the layer has flowed since it was stated. */
-  flowed: number;
+  flowed: Float64Array;
+  /** Thickness of the whole stack, m. */
+  total: number;
 }
 
 /** Puts layers, bottom to top, on one another, their free strains taken at `temperature` (K) against the base layer. */
-export function placeLayers(layersBottomToTop: readonly NamedLayer[], temperature: number): PlacedLayer[] {
+export function placeLayers(layersBottomToTop: readonly NamedLayer[], temperature: number): PlacedLayers {
   const base = findBase(layersBottomToTop);
+  const placed = emptyColumns(layersBottomToTop.length);
   let total = 0;
   for (const { layer } of layersBottomToTop) total += layer.thickness;
+  placed.total = total;
   let below = 0;
-  return layersBottomToTop.map((entry) => {
+  let n = 0;
+  for (const entry of layersBottomToTop) {
     const { thickness, biaxialModulus, coverage } = entry.layer;
-    const centre = below + thickness / 2 - total / 2;
+    placed.thickness[n] = thickness;
+    placed.biaxialModulus[n] = biaxialModulus;
+    placed.coveredModulus[n] = biaxialModulus * coverage;
+    placed.centre[n] = below + thickness / 2 - total / 2;
+    placed.freeStrain[n] = freeStrain(entry, base, temperature);
     below += thickness;
-    return {
-      thickness,
-      biaxialModulus,
-      coveredModulus: biaxialModulus * coverage,
-      stiffness: biaxialModulus * coverage * thickness,
-      centre,
-      freeStrain: freeStrain(entry, base, temperature),
-      flowed: 0,
-    };
-  });
+    n += 1;
+  }
+  return placed;
+}
+
+/** Columns of zeros in one piece of memory: pieces of their own would cost more than what is put into them. */
+function emptyColumns(count: number): PlacedLayers {
+  const all = new ArrayBuffer(6 * count * Float64Array.BYTES_PER_ELEMENT);
+  return {
+    count,
+    thickness: column(all, 0, count),
+    biaxialModulus: column(all, 1, count),
+    coveredModulus: column(all, 2, count),
+    centre: column(all, 3, count),
+    freeStrain: column(all, 4, count),
+    flowed: column(all, 5, count),
+    total: 0,
+  };
+}
+
+function column(all: ArrayBuffer, place: number, count: number): Float64Array {
+  return new Float64Array(all, place * count * Float64Array.BYTES_PER_ELEMENT, count);
 }
 
 /** The layer whose flat state is the zero of strain: the first that expands as silicon, else the thickest. */
 export function findBase(layers: readonly NamedLayer[]): NamedLayer {
-  const silicon = layers.find(({ layer }) => layer.cte === "silicon");
-  if (silicon) return silicon;
-  const [first, ...rest] = layers;
-  if (!first) throw new EngineInputError("layers", "the stack is empty", "at least one layer");
-  return rest.reduce((thickest, next) => (next.layer.thickness > thickest.layer.thickness ? next : thickest), first);
+  let thickest: NamedLayer | undefined;
+  for (const entry of layers) {
+    if (entry.layer.cte === "silicon") return entry;
+    if (!thickest || entry.layer.thickness > thickest.layer.thickness) thickest = entry;
+  }
+  if (!thickest) throw new EngineInputError("layers", "the stack is empty", "at least one layer");
+  return thickest;
 }
 
-/** Lets a placed layer flow by a strain, tension positive: it is longer for good. */
-export function letFlow(layer: PlacedLayer, by: number): void {
-  layer.freeStrain += by;
-  layer.flowed += by;
+/** Lets the placed layer at `at` flow by a strain, tension positive: it is longer for good. */
+export function letFlow(placed: PlacedLayers, at: number, by: number): void {
+  placed.freeStrain[at] = (placed.freeStrain[at] ?? 0) + by;
+  placed.flowed[at] = (placed.flowed[at] ?? 0) + by;
 }

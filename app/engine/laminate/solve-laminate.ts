@@ -10,7 +10,7 @@ import {
   strainPerHeightOf,
   stretchingOf,
 } from "./laminate-sums.ts";
-import { placeLayers, type PlacedLayer } from "./placed-layers.ts";
+import { placeLayers, type PlacedLayers } from "./placed-layers.ts";
 
 export { findBase } from "./placed-layers.ts";
 
@@ -71,24 +71,35 @@ export function solveLaminate(layersBottomToTop: readonly Layer[], o: LaminateOp
     return { layer: checkLayer(layer, field), field };
   });
   const temperature = o.temperature ?? ROOM_TEMPERATURE;
-  const layers = placeLayers(named, temperature);
-  const balance = balanceLayers(layers, o.slidingOn ? solveLaminate(o.slidingOn, { temperature }) : undefined);
-  const stressAt = (l: PlacedLayer, z: number) =>
-    l.biaxialModulus * (balance.midplaneStrain - balance.curvature * z - l.freeStrain);
-  return {
-    ...balance,
-    freeStrain: layers.map((l) => l.freeStrain),
-    stressBottom: layers.map((l) => stressAt(l, l.centre - l.thickness / 2)),
-    stressTop: layers.map((l) => stressAt(l, l.centre + l.thickness / 2)),
-    meanStress: layers.map((l) => stressAt(l, l.centre)),
-  };
+  const placed = placeLayers(named, temperature);
+  const balance = balanceLayers(placed, o.slidingOn ? solveLaminate(o.slidingOn, { temperature }) : undefined);
+  const result: LaminateResult = { ...balance, freeStrain: [], stressBottom: [], stressTop: [], meanStress: [] };
+  for (let n = 0; n < placed.count; n += 1) {
+    const half = (placed.thickness[n] ?? 0) / 2;
+    const centre = placed.centre[n] ?? 0;
+    result.freeStrain.push(placed.freeStrain[n] ?? 0);
+    result.stressBottom.push(stressAt(placed, n, centre - half, balance));
+    result.stressTop.push(stressAt(placed, n, centre + half, balance));
+    result.meanStress.push(stressAt(placed, n, centre, balance));
+  }
+  return result;
+}
+
+/** Stress in layer `n` itself at a height over the mid-plane (m), Pa. */
+function stressAt(
+  { biaxialModulus, freeStrain }: PlacedLayers,
+  n: number,
+  z: number,
+  { midplaneStrain, curvature }: LaminateBalance,
+): number {
+  return (biaxialModulus[n] ?? 0) * (midplaneStrain - curvature * z - (freeStrain[n] ?? 0));
 }
 
 /** A stack that takes the same curvature as another and slides on it. */
 export type SlidingPlate = Pick<LaminateBalance, "curvature" | "bendingStiffness" | "stretchingStiffness">;
 
 /** The part of `solveLaminate` that concerns the stack as a whole, for layers that are checked and placed already. */
-export function balanceLayers(layers: readonly PlacedLayer[], slidingOn?: SlidingPlate): LaminateBalance {
+export function balanceLayers(layers: PlacedLayers, slidingOn?: SlidingPlate): LaminateBalance {
   const { neutralPlane, meanStrain, ...alone } = bend(layers);
   const moment =
     alone.strainPerHeight * alone.bendingStiffness - (slidingOn ? slidingOn.bendingStiffness * slidingOn.curvature : 0);
@@ -109,30 +120,22 @@ export function balanceLayers(layers: readonly PlacedLayer[], slidingOn?: Slidin
  * Sums through the stack taken twice: about the mid-plane to find the neutral plane and the mean strain, then about those, so
  * that nothing large cancels for a thin film on a wafer.
  */
-function bend(layers: readonly PlacedLayer[]) {
-  const count = layers.length;
+function bend(layers: PlacedLayers) {
+  const { count, total } = layers;
   if (scratch.thickness.length < count) scratch = columns(2 * count);
-  const { thickness, modulus, pressure, sums } = scratch;
-  let total = 0;
-  layers.forEach((l, n) => {
-    thickness[n] = l.thickness;
-    modulus[n] = l.coveredModulus;
-    total += l.thickness;
-  });
-  const sumAbout = (plane: number, strain: number) => {
-    layers.forEach((l, n) => {
-      pressure[n] = l.coveredModulus * (l.freeStrain - strain);
-    });
-    laminateSums(count, thickness, 0, modulus, pressure, -total / 2 - plane, sums);
-  };
-  sumAbout(0, 0);
+  const { thickness, modulus, sums } = scratch;
+  for (let n = 0; n < count; n += 1) {
+    thickness[n] = layers.thickness[n] ?? 0;
+    modulus[n] = layers.coveredModulus[n] ?? 0;
+  }
+  sumAbout(layers, -total / 2, 0);
   const stretching = stretchingOf(sums);
   if (!(stretching > 0)) {
     throw new EngineInputError("layers", "no layer covers any area, so the stack has no stiffness");
   }
   const neutralPlane = neutralPlaneOf(sums);
   const meanStrain = meanStrainOf(sums);
-  sumAbout(neutralPlane, meanStrain);
+  sumAbout(layers, -total / 2 - neutralPlane, meanStrain);
   return {
     stretching,
     neutralPlane,
@@ -140,6 +143,13 @@ function bend(layers: readonly PlacedLayer[]) {
     bendingStiffness: bendingStiffnessOf(sums),
     strainPerHeight: strainPerHeightOf(sums),
   };
+}
+
+/** Sums over the stack in `scratch`, its lowest face at a height `bottom`, free strains taken over `strain`. */
+function sumAbout({ count, freeStrain }: PlacedLayers, bottom: number, strain: number): void {
+  const { thickness, modulus, pressure, sums } = scratch;
+  for (let n = 0; n < count; n += 1) pressure[n] = (modulus[n] ?? 0) * ((freeStrain[n] ?? 0) - strain);
+  laminateSums(count, thickness, 0, modulus, pressure, bottom, sums);
 }
 
 /** Columns that `bend` fills anew each time: a flow solves tens of thousands of stacks, and new ones would cost more than the sums. */

@@ -1,3 +1,4 @@
+import { normalShareBelow } from "../uncertainty/random/inverse-normal.ts";
 import type { SourceKind } from "../vocabulary.ts";
 
 /**
@@ -6,7 +7,7 @@ import type { SourceKind } from "../vocabulary.ts";
  */
 export function shareBeyond(value: number, uncertainty: number | null, limit: number): string {
   if (uncertainty === null || uncertainty === 0) return "";
-  const share = 1 - normalDistribution((limit - value) / uncertainty);
+  const share = normalShareBelow((value - limit) / uncertainty);
   if (share < 0.001) return "";
   if (share < 0.05) return "With the tolerances given, fewer than 1 wafer in 20 is expected beyond it.";
   if (share < 0.2) return "With the tolerances given, fewer than 1 wafer in 5 is expected beyond it.";
@@ -24,14 +25,4 @@ export function sharedBy(budget: readonly { input: string; source: SourceKind }[
   if (assumed.length > 0) return `Assumed: ${assumed.map(({ input }) => input).join("; ")}.`;
   const [first] = budget;
   return first ? `It rests most on ${first.input}.` : "";
-}
-
-/** Standard normal distribution function, absolute error below 7.5e-8 (Abramowitz & Stegun 1964, 26.2.17, from memory). */
-function normalDistribution(z: number): number {
-  const t = 1 / (1 + 0.2316419 * Math.abs(z));
-  const tail =
-    (Math.exp(-(z * z) / 2) / Math.sqrt(2 * Math.PI)) *
-    t *
-    (0.31938153 + t * (-0.356563782 + t * (1.781477937 + t * (-1.821255978 + t * 1.330274429))));
-  return z >= 0 ? 1 - tail : tail;
 }

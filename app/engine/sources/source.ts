@@ -1,3 +1,4 @@
+/** How far an entry of the bibliography was consulted. */
 export type SourceBasis =
   | "read"
   | "abstract read"

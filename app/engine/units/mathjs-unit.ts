@@ -1,4 +1,4 @@
-import { createComplexClass, createFractionClass, createUnitClass } from "mathjs";
+import { createUnitClass } from "mathjs";
 
 // The factory is public in the package but missing from its type declarations.
 declare module "mathjs" {
@@ -6,8 +6,22 @@ declare module "mathjs" {
     toNumber(unit: string): number;
   }
   function createUnitClass(scope: Record<string, unknown>): new (value: number, unit: string) => UnitOfMeasure;
-  function createFractionClass(): unknown;
-  function createComplexClass(): unknown;
+}
+
+/** What the package's table needs of a fraction: it keeps 5/9 of the Fahrenheit scale as one, and turns it into a number when used. */
+class Quotient {
+  readonly isFraction = true;
+  readonly above: number;
+  readonly below: number;
+
+  constructor(above: number, below: number) {
+    this.above = above;
+    this.below = below;
+  }
+
+  valueOf(): number {
+    return this.above / this.below;
+  }
 }
 
 type UnitClass = ReturnType<typeof createUnitClass>;
@@ -16,7 +30,8 @@ let unitClass: UnitClass | null = null;
 
 /**
  * The package's unit class over plain numbers. Made from its factory alone, because the ready-made build brings big numbers,
- * matrices and the expression parser along; made on first use, so that a page without units does not carry it.
+ * matrices and the expression parser along, and without its complex numbers and fractions, which would be a tenth of what the
+ * live estimate loads; made on first use, so that a page without units does not carry it.
  */
 function units(): UnitClass {
   unitClass ??= createUnitClass({
@@ -33,9 +48,10 @@ function units(): UnitClass {
     isNumeric: (value: unknown) => typeof value === "number",
     format: String,
     number: Number,
-    Complex: createComplexClass(),
+    // Its table of units holds one complex number, of a unit of power that is not used here.
+    Complex: { I: NaN },
     BigNumber: null,
-    Fraction: createFractionClass(),
+    Fraction: Quotient,
   });
   return unitClass;
 }

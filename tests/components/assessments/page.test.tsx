@@ -119,6 +119,6 @@ describe("the assessment page", () => {
     const text = words(page());
     expect(text).toContain("Number TERN-A003");
     expect(text).toContain("razor-sharp");
-    expect(text).toContain("Engine 0.1.0, inputs of 2026-12-01 11:10 UTC");
+    expect(text).toContain("Engine 0.2.0, inputs of 2026-12-01 11:10 UTC");
   });
 });

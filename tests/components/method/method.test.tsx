@@ -13,7 +13,7 @@ const LIMIT = { title: "200 mm wafer: bare from", value: "310\u00A0µm", deliver
 const rule = (limits: RuleText["limits"]): RuleText => ({ number: 1, title: "Thickness", asks: "Is it held?", limits });
 
 describe("the method page", () => {
-  const markup = render(<MethodView rules={[rule([LIMIT])]} engineVersion="0.1.0" />);
+  const markup = render(<MethodView rules={[rule([LIMIT])]} engineVersion="0.2.0" />);
   const anchors = attributes(markup, "id");
 
   it("has an anchor for every equation, rule, source and section", () => {
@@ -31,7 +31,7 @@ describe("the method page", () => {
 
   it("shows the site's value beside the delivered one, and no values to a guest", () => {
     expect(words(markup)).toMatch(/bare from 310.µm delivered 300.µm trial 12/);
-    const forGuest = words(render(<MethodView rules={[rule(null)]} engineVersion="0.1.0" />));
+    const forGuest = words(render(<MethodView rules={[rule(null)]} engineVersion="0.2.0" />));
     expect(forGuest).toContain("Is it held?");
     expect(forGuest).not.toMatch(/Value here|bare from|310/);
   });

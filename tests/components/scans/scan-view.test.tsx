@@ -29,7 +29,7 @@ function detail(tail: string): ScanDetail {
     working: shownWorking(
       stoneyStressWorking({ ...MONITOR, curvatureChange: result.curvatureChange, biaxialModulus: 180e9 }),
     ),
-    engineVersion: "0.1.0",
+    engineVersion: "0.2.0",
     createdAt: "2026-12-01T08:00:00.000Z",
     createdBy: "Jude Okafor",
   };

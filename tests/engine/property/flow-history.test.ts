@@ -11,6 +11,7 @@ import type { FilmAddition, FlowInput, StepInput } from "#app/engine/flow/model.
 import { filmStresses, settle } from "#app/engine/flow/settle.ts";
 import { walkFlow } from "#app/engine/flow/walk.ts";
 import { defaultLimits } from "#app/engine/rules/limits.ts";
+import { layerRows } from "../placed.ts";
 import { addition, bondStep, debondStep, exact, film, flow, grindStep, step } from "../unit/flow-samples.ts";
 import { between, logarithmic } from "./arbitraries.ts";
 
@@ -84,7 +85,7 @@ describe("a walk", () => {
           const { placed, solution } = settle(after, temperature, { metalHistory: true, heldFlat: false });
           const { midplaneStrain, curvature } = solution;
           let [force, moment, forces, moments] = [0, 0, 0, 0];
-          for (const l of placed) {
+          for (const l of layerRows(placed)) {
             const strain = midplaneStrain - curvature * l.centre - l.freeStrain;
             const parts = Math.abs(midplaneStrain) + Math.abs(curvature * l.centre) + Math.abs(l.freeStrain);
             const own = (-curvature * l.stiffness * l.thickness ** 2) / 12;

@@ -16,6 +16,7 @@ import { laminateWorking } from "#app/engine/laminate/working.ts";
 import { solveLaminate } from "#app/engine/laminate/solve-laminate.ts";
 import { defaultLimits } from "#app/engine/rules/limits.ts";
 import { warpWorking } from "#app/engine/rules/warp-working.ts";
+import { layerRows } from "../placed.ts";
 import { relative } from "../relative.ts";
 import {
   addition,
@@ -163,14 +164,15 @@ describe("a pair above its flow point", () => {
     });
     const { after } = lastOf(pair([], thermoplastic(), [addition({ film: copper, thickness: exact(um(10)) })]));
     const { placed, solution, slidingOn } = settle(after, celsius(250), { metalHistory: true, heldFlat: false });
-    const stress = placed.map(
+    const layers = layerRows(placed);
+    const stress = layers.map(
       (l) => l.biaxialModulus * (solution.midplaneStrain - solution.curvature * l.centre - l.freeStrain),
     );
-    const force = placed.map((l, n) => l.thickness * (stress[n] ?? 0));
+    const force = layers.map((l, n) => l.thickness * (stress[n] ?? 0));
     expect(Math.abs(force.reduce((sum, part) => sum + part, 0))).toBeLessThan(1e-9 * Math.abs(force[0] ?? 0));
     const plate = slidingOn?.[0]?.layer;
     const carried = plate ? (plate.biaxialModulus * plate.thickness ** 3 * solution.curvature) / 12 : 0;
-    const own = placed.reduce(
+    const own = layers.reduce(
       (sum, l, n) => sum + (force[n] ?? 0) * l.centre - (solution.curvature * l.biaxialModulus * l.thickness ** 3) / 12,
       0,
     );

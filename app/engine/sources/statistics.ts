@@ -1,7 +1,7 @@
 import { memory, type Source } from "./source.ts";
 
-/** Uncertainty and sampling. */
-export const UNCERTAINTY_SOURCES = {
+/** Uncertainty, sampling, inverse questions and fits to measurements. */
+export const STATISTICS = {
   "gum-2008": {
     author: "Joint Committee for Guides in Metrology",
     title: "JCGM 100:2008, Guide to the expression of uncertainty in measurement",
@@ -57,5 +57,34 @@ export const UNCERTAINTY_SOURCES = {
     year: null,
     place: "unbiased for any model; checked against closed forms for linear models and against plain draws",
     basis: "own derivation",
+  },
+  "inverse-questions": {
+    author: "this program",
+    title: "Inputs at which a figure takes a value: places, sign changes and turns, halving",
+    year: null,
+    place:
+      "every answer put back into the full model; roots closer than two turns between neighbouring places are missed",
+    basis: "own derivation",
+  },
+  "levenberg-1944": {
+    author: "K. Levenberg",
+    title: "A method for the solution of certain non-linear problems in least squares",
+    year: 1944,
+    place: "Quarterly of Applied Mathematics 2, page 164",
+    basis: memory,
+  },
+  "marquardt-1963": {
+    author: "D. W. Marquardt",
+    title: "An algorithm for least-squares estimation of nonlinear parameters",
+    year: 1963,
+    place: "Journal of the Society for Industrial and Applied Mathematics 11, page 431",
+    basis: memory,
+  },
+  "gum-supplement-2-2011": {
+    author: "Joint Committee for Guides in Metrology",
+    title: "JCGM 102:2011, Supplement 2 to the Guide: extension to any number of output quantities",
+    year: 2011,
+    place: "JCGM",
+    basis: memory,
   },
 } as const satisfies Record<string, Source>;
