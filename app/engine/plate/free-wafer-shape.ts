@@ -59,7 +59,7 @@ export interface FreeWaferShape {
 }
 
 /** The bow of small-deflection theory counts as right while it is within this share of the nonlinear one. */
-const LINEAR_WITHIN = 0.01;
+export const LINEAR_WITHIN = 0.01;
 
 /**
  * Shape that a free wafer takes, gravity left out, under the stress that would give it `linearCurvature` by small-deflection

@@ -1,7 +1,13 @@
 import { EngineInputError } from "../errors.ts";
+import { ROOM_TEMPERATURE } from "../laminate/layer.ts";
 import { criticalLinearCurvature } from "../plate/critical-load.ts";
+import { LINEAR_WITHIN } from "../plate/free-wafer-shape.ts";
+import { bowFromCurvature } from "../stoney/bow.ts";
+import { laminateInputValues, laminateModel } from "../uncertainty/laminate-model.ts";
+import { shapeCurve, type ShapeCurve } from "../uncertainty/shape-curve.ts";
 import type { ShapeRegime } from "../vocabulary.ts";
-import { estimateStack, freeDisc } from "./estimate-stack.ts";
+import { estimateStack, freeDisc, type StackDisc } from "./estimate-stack.ts";
+import { laminateOfStack } from "./laminate-of-stack.ts";
 import { withThickness, type StackInput } from "./model.ts";
 
 /** One point of the curve warp against remaining silicon. */
@@ -15,6 +21,8 @@ export interface SweepPoint {
 
 /**
  * Warp of the free wafer over a range of silicon thickness (m), at `points` thicknesses spaced evenly on a logarithmic scale.
+ * For a chart that follows every keystroke: the laminate is compiled once, and the shape is read from `shapeCurve`, so a warp is
+ * within 1e-4 of that of `estimateStack`.
  * @throws EngineInputError when the range is empty or fewer than two points are asked
  */
 export function thicknessSweep(stack: StackInput, range: { from: number; to: number; points: number }): SweepPoint[] {
@@ -23,11 +31,54 @@ export function thicknessSweep(stack: StackInput, range: { from: number; to: num
     throw new EngineInputError("sweep", "the range of thickness is empty", "0 m < from < to");
   if (!Number.isInteger(points) || points < 2 || points > 500)
     throw new EngineInputError("sweep.points", "the number of points is out of range", "2 to 500");
+  const thickest = estimateStack(withThickness(stack, to));
+  const { disc } = thickest;
+  const layers = laminateOfStack(withThickness(stack, to));
+  const place = layers.findIndex(({ cte }) => cte === "silicon");
+  const curve = siliconCurve(disc);
+  const inputs = Float64Array.from(laminateInputValues(layers));
+  const warp = new Float64Array(1);
+  let regime: ShapeRegime = "linear";
+  const model = laminateModel(layers, { temperature: stack.temperature ?? ROOM_TEMPERATURE }).shape(
+    {
+      ...curve,
+      warp(curvature, thickness) {
+        regime = regimeOnCurve(curve, disc, curvature, thickness);
+        return curve.warp(curvature, thickness);
+      },
+    },
+    "warp",
+  );
   return Array.from({ length: points }, (_, index) => {
     const thickness = index === points - 1 ? to : from * (to / from) ** (index / (points - 1));
-    const { shape, stoney } = estimateStack(withThickness(stack, thickness));
-    return { thickness, warp: shape.warp, linearWarp: Math.abs(stoney.sagitta), regime: shape.regime };
+    inputs[place] = thickness;
+    model.evaluate(inputs, 1, warp);
+    // Stoney's curvature goes with the inverse square of the silicon.
+    const linearWarp = Math.abs(thickest.stoney.sagitta) * (to / thickness) ** 2;
+    return { thickness, warp: warp[0] ?? 0, linearWarp, regime };
   });
+}
+
+/** One curve for each kind of silicon and size of wafer: a keystroke must not build it again. */
+const curves = new Map<string, ShapeCurve>();
+
+function siliconCurve({ radius, youngsModulus, poissonsRatio, crystal }: StackDisc): ShapeCurve {
+  const key = `${crystal ?? ""} ${poissonsRatio} ${radius}`;
+  const known = curves.get(key);
+  if (known) return known;
+  const curve = shapeCurve({ radius, youngsModulus, poissonsRatio, ...(crystal && { crystal }) });
+  // A handful of wafer sizes exists; whoever asks for hundreds gets no memory of ours.
+  if (curves.size < 16) curves.set(key, curve);
+  return curve;
+}
+
+/** The regime as `freeWaferShape` has it. */
+function regimeOnCurve(curve: ShapeCurve, disc: StackDisc, curvature: number, thickness: number): ShapeRegime {
+  const onset = criticalLinearCurvature({ ...disc, thickness });
+  if (Math.abs(curvature) > onset) return "curled";
+  const sagitta = Math.abs(curve.sagitta(curvature, thickness));
+  const flat = Math.abs(bowFromCurvature({ curvature, radius: disc.radius }));
+  return flat - sagitta <= LINEAR_WITHIN * sagitta ? "linear" : "nonlinear";
 }
 
 const THINNEST = 1e-6;
