@@ -202,3 +202,10 @@ export {
   type TapeInput,
   type WaferKind,
 } from "./flow/handling-inputs.ts";
+
+// What would make it pass: carriers and bonds, smallest changes, process window
+export type { Catalogue, CatalogueMaterial, CatalogueTool } from "./trial/catalogue.ts";
+export { blocks, relativeMargin } from "./trial/margin.ts";
+export { bondSpans, type BondSpan } from "./finder/bond-spans.ts";
+export { findBonds, type BondSearch, type Misfit, type TriedBond, type WarpTarget } from "./finder/find-bonds.ts";
+export { withBond, type BondChoice } from "./finder/with-bond.ts";
