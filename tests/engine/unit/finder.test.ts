@@ -4,31 +4,15 @@
  *   margin    share of a limit that is left at the tightest finding, 1
  */
 import { describe, expect, it } from "vitest";
-import demo from "../../../fixtures/demo-flows.json" with { type: "json" };
 import { bondSpans } from "#app/engine/finder/bond-spans.ts";
 import { assessFlow } from "#app/engine/flow/assess.ts";
 import { findBonds, type TriedBond } from "#app/engine/finder/find-bonds.ts";
 import { withBond } from "#app/engine/finder/with-bond.ts";
 import { defaultLimits } from "#app/engine/rules/limits.ts";
-import { bondingMaterial, carrier, demoFlow } from "../../fixtures/demo-flow-input.ts";
+import { demoCatalogue as catalogue } from "../../fixtures/demo-catalogue.ts";
+import { carrier, demoFlow } from "../../fixtures/demo-flow-input.ts";
 
 const limits = defaultLimits();
-const catalogue = {
-  carriers: Object.keys(demo.carriers).map(carrier),
-  materials: Object.entries(demo.bondingMaterials).map(
-    ([
-      name,
-      {
-        thickness_range_um: [least = 0, most = 0],
-      },
-    ]) => ({
-      material: bondingMaterial(name),
-      leastThickness: least * 1e-6,
-      mostThickness: most * 1e-6,
-    }),
-  ),
-};
-
 const called = ({ carrier: { name }, material, thickness }: TriedBond) =>
   `${name}, ${material.name}, ${(thickness * 1e6).toFixed(0)} µm`;
 
