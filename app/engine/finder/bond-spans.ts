@@ -1,4 +1,4 @@
-import type { FlowInput } from "../flow/model.ts";
+import type { FlowInput, StepKind } from "../flow/model.ts";
 
 /** A bond of a flow: the numbers of the steps that make it and take it off; `to` null when it stays on. */
 export interface BondSpan {
@@ -6,14 +6,19 @@ export interface BondSpan {
   to: number | null;
 }
 
-/** The bonds of a flow in order. In a two-carrier transfer the first debond takes off the first carrier. */
-export function bondSpans(flow: FlowInput): BondSpan[] {
-  const debonds = flow.steps.flatMap(({ kind }, index) => (kind === "debond" ? [index + 1] : []));
-  const bonds = flow.steps.flatMap(({ kind, bond }, index) => (kind === "bond" && bond ? [index + 1] : []));
+/** The bonds of a flow in order, by the kinds of its steps. In a two-carrier transfer the first debond takes off the first carrier. */
+export function spansOfKinds(kinds: readonly (StepKind | null)[]): BondSpan[] {
+  const numbers = (wanted: StepKind) => kinds.flatMap((kind, index) => (kind === wanted ? [index + 1] : []));
+  const debonds = numbers("debond");
   let after = 0;
-  return bonds.map((from) => {
+  return numbers("bond").map((from) => {
     const to = debonds.find((number) => number > from && number > after) ?? null;
     if (to !== null) after = to;
     return { from, to };
   });
+}
+
+/** The bonds of a flow in order; a bond to nothing is none. */
+export function bondSpans(flow: Pick<FlowInput, "steps">): BondSpan[] {
+  return spansOfKinds(flow.steps.map(({ kind, bond }) => (kind === "bond" && !bond ? null : kind)));
 }

@@ -99,7 +99,10 @@ function changedStep(step: StepInput, change: StepChange, { tools }: Catalogue):
         { ...film, thickness: tried(film.thickness, change.value, REMEDY_NOTE) },
       ]);
     case "film stress":
-      return withFilm(step, change, (film) => [{ ...film, stress: tried(film.stress, change.value, REMEDY_NOTE) }]);
+      // What a stress was measured on says nothing of one that nobody measured.
+      return withFilm(step, change, ({ stressRecord: _measuredOn, ...film }) => [
+        { ...film, stress: tried(film.stress, change.value, REMEDY_NOTE) },
+      ]);
     case "film on the back":
       return withFilm(step, change, (film) => [
         film,
