@@ -1,3 +1,4 @@
+import { Link } from "react-router";
 import { noBreak } from "#app/components/drawings/no-break.ts";
 import { SourceMark } from "#app/components/drawings/SourceMark.tsx";
 import { TitleBlock } from "#app/components/drawings/TitleBlock.tsx";
@@ -44,6 +45,11 @@ export function SidePane({ view }: { view: AssessmentView }) {
         {bonds.length > 0 ? (
           <PaneSection title={bonds.length === 1 ? "The bond" : "The bonds"}>
             <BondList bonds={bonds} />
+            <p className="screen-only mt-2">
+              <Link to={`/assessments/${view.head.id}/carriers`} className="link">
+                Carriers and bonds that fit
+              </Link>
+            </p>
           </PaneSection>
         ) : null}
       </div>

@@ -17,7 +17,7 @@ export function TryOnCopy({ assessmentId, posted, name }: Props) {
       <input type="hidden" name="changes" value={posted} />
       <button
         type="submit"
-        className="btn"
+        className="btn whitespace-nowrap"
         disabled={waiting}
         aria-label={waiting ? undefined : `Try on a copy: ${name}`}
       >

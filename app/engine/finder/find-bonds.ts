@@ -12,7 +12,7 @@ import { bondSpans, type BondSpan } from "./bond-spans.ts";
 import { isPlanned, withBond, type BondChoice } from "./with-bond.ts";
 
 /** Rules whose outcome can hang on the carrier and what bonds it; the others are the same with every choice. */
-const BOND_RULES = RULES.filter(({ number }) => [2, 3, 4, 5, 6, 7, 8, 9, 14, 17, 18].includes(number));
+const BOND_RULES = RULES.filter(({ number }) => [2, 3, 4, 5, 6, 7, 8, 9, 12, 14, 17, 18].includes(number));
 
 /** Largest warp wanted at 25 °C after a step (number from 1), m. */
 export interface WarpTarget {
