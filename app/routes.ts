@@ -45,6 +45,7 @@ export default [
       route("compare", "routes/_app/assessments/compare.tsx"),
       route("remedies", "routes/_app/assessments/remedies.tsx"),
       route("carriers", "routes/_app/assessments/carriers.tsx"),
+      route("window", "routes/_app/assessments/window.tsx"),
       route("carriers.csv", "routes/_app/assessments/carriers-csv.ts"),
     ]),
     ...prefix("carriers", [

@@ -225,3 +225,5 @@ export {
   type RemedyProgress,
   type Worsened,
 } from "./remedy/find-remedies.ts";
+export { processWindow, type ProcessWindow, type WindowAxis, type WindowPoint } from "./window/window.ts";
+export { contours, type ContourPoint } from "./window/contours.ts";

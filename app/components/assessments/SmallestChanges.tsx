@@ -33,6 +33,9 @@ export function SmallestChanges({ assessmentId }: { assessmentId: string }) {
       <Link to={path} className="link screen-only">
         {cards.length > SHOWN ? `All ${cards.length} changes that clear something` : "Smallest changes that clear it"}
       </Link>
+      <Link to={`/assessments/${assessmentId}/window`} className="link screen-only mt-1 block w-fit">
+        Process window over two inputs
+      </Link>
     </div>
   );
 }

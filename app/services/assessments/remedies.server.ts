@@ -1,14 +1,12 @@
 import { createHash } from "node:crypto";
-import { setImmediate as othersTurn } from "node:timers/promises";
 import { EngineInputError } from "#app/engine/errors.ts";
 import { findRemedies, type RemedyAnswer } from "#app/engine/remedy/find-remedies.ts";
 import type { Catalogue } from "#app/engine/trial/catalogue.ts";
 import { ENGINE_VERSION } from "#app/engine/version.ts";
 import type { AssessmentInput } from "#app/schemas/assessment-changes.ts";
+import { inTurns } from "./in-turns.server.ts";
 import type { TrialGround } from "./trial-ground.server.ts";
 
-/** Longest that a search keeps others waiting, ms. */
-const TURN = 20;
 /** How many answers are kept: each is small, and made anew in a second or two. */
 const KEPT = 60;
 
@@ -34,15 +32,8 @@ export function remediesOf({ input, catalogue }: TrialGround): Promise<RemedyAns
 
 async function worked({ flow, limits }: AssessmentInput, catalogue: Catalogue): Promise<RemedyAnswer[] | null> {
   try {
-    const search = findRemedies(flow, limits, catalogue);
-    let since = performance.now();
-    for (;;) {
-      const next = search.next();
-      if (next.done) return next.value.answers;
-      if (performance.now() - since < TURN) continue;
-      await othersTurn();
-      since = performance.now();
-    }
+    const { answers } = await inTurns(findRemedies(flow, limits, catalogue));
+    return answers;
   } catch (error) {
     if (error instanceof EngineInputError) return null;
     throw error;
