@@ -48,6 +48,9 @@ export interface WindowDrawing {
 export interface WindowPageData {
   head: TrialHead;
   inputs: WindowInput[];
+  steps: { number: number; title: string }[];
+  /** the only step that is judged; null for the whole flow */
+  step: number | null;
   x: AskedAxis;
   y: AskedAxis;
   /** why nothing is drawn, where no field is at fault */

@@ -48,6 +48,20 @@ test("the finder tries every carrier, searches and filters, and goes out as a fi
   await expect(table.locator("th[aria-sort=descending]")).toHaveText(/Thickness/);
 });
 
+test("the process window is drawn over two inputs, with its verdicts as a table", async ({ page }) => {
+  await signIn(page, "engineer");
+  const path = await assessPetrel(page);
+  await page.goto(`${path}/window`);
+  await expect(page.getByRole("heading", { name: "Choose two inputs" })).toBeVisible();
+  await page.getByLabel("Along").selectOption("film thickness 6 0");
+  await page.getByLabel("Upwards").selectOption("silicon after 12");
+  await page.getByLabel("Judged at").selectOption("12");
+  await page.getByRole("button", { name: "Draw" }).click();
+  await expect(page.getByRole("img", { name: /Verdict over/ })).toBeVisible({ timeout: 20_000 });
+  await expect(page.getByRole("table").getByText("Caution").first()).toBeVisible();
+  await expectNoAxeFindings(page);
+});
+
 test.describe("a target that is none", () => {
   test.use({ refusals: true });
 
@@ -59,6 +73,8 @@ test.describe("a target that is none", () => {
     await expect(page.getByText(/parsecs is not a unit/)).toBeVisible();
     await page.goto(`${path}/carriers?warp=-3+um&step=99`);
     await expect(page.getByText("Choose the step that the target is for.")).toBeVisible();
+    await page.goto(`${path}/window?x=film+thickness+6+0&y=silicon+after+12&x-to=-3`);
+    await expect(page.getByText(/-3 what/)).toBeVisible();
   });
 });
 

@@ -12,7 +12,7 @@ import { WindowTable } from "./WindowTable.tsx";
 
 /** The verdict of a flow over two of its inputs: where it runs, and how far what is planned stands from where it does not. */
 export function WindowPage({ page }: { page: WindowPageData }) {
-  const { head, inputs, x, y, fault, drawing } = page;
+  const { head, inputs, steps, step, x, y, fault, drawing } = page;
   const working = useNavigation().state === "loading";
   const [alongX, alongY] = [x, y].map(({ input }) => inputs.find(({ key }) => key === input) ?? null);
   return (
@@ -25,9 +25,17 @@ export function WindowPage({ page }: { page: WindowPageData }) {
           { name: `Assessment, revision ${head.revision}`, path: `/assessments/${head.id}` },
         ]}
       />
-      <Form method="get" className="screen-only mb-4 max-w-280" key={JSON.stringify([x, y])}>
+      <Form method="get" className="screen-only mb-4 max-w-280" key={JSON.stringify([x, y, step])}>
         <AxisFields name="x" label="Along" axis={x} inputs={inputs} />
         <AxisFields name="y" label="Upwards" axis={y} inputs={inputs} />
+        <SelectField
+          name="step"
+          label="Judged at"
+          blank="The whole flow"
+          options={steps.map(({ number, title }) => ({ value: String(number), label: `Step ${number}, ${title}` }))}
+          defaultValue={step === null ? "" : String(step)}
+          className="w-120 max-w-full min-w-0"
+        />
         <button type="submit" className="btn btn-primary mt-2" disabled={working}>
           {working ? "Walking the flow" : "Draw"}
         </button>
@@ -81,7 +89,7 @@ interface AxisProps {
 
 function AxisFields({ name, label, axis, inputs }: AxisProps) {
   return (
-    <fieldset className="flex flex-wrap items-start gap-x-3 gap-y-2">
+    <fieldset className="flex min-w-0 flex-wrap items-start gap-x-3 gap-y-2">
       <legend className="sr-only">{label}</legend>
       <SelectField
         name={name}

@@ -50,7 +50,8 @@ export function WindowPlot({ drawing: { x, y, runs, boundary, planned }, names, 
                     x={INSET.left + (from - 0.5) * cell.width}
                     y={INSET.top + plot.height - (row + 0.5) * cell.height}
                     width={(to - from + 1) * cell.width}
-                    height={cell.height}
+                    // A hair of overlap: rows that only touch leave seams in the hatch.
+                    height={cell.height + 0.5}
                   />
                 ))}
             </clipPath>

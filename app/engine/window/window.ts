@@ -46,14 +46,15 @@ const COARSE = 4;
  * margins change sign, is it looked at closer, so that a window of 41 by 41 costs a few hundred walks. Within a block whose
  * corners agree the outcome is theirs and the margin is interpolated: an island smaller than a block is missed. Yields after
  * every walk. Nominal values.
- * @param cells number of cells along each side, a multiple of 4, from 4 to 80
+ * @param cells number of cells along each side, a multiple of 4, from 4 to 80; default 40
+ * @param step number of the only step that is judged; null for all of them
  * @throws EngineInputError when a range is empty or the cells are no such number
  */
 export function* processWindow(
   flow: FlowInput,
   limits: SiteLimits,
   axes: { x: WindowAxis; y: WindowAxis },
-  cells = 40,
+  { cells = 40, step = null }: { cells?: number; step?: number | null } = {},
 ): Generator<WindowProgress, ProcessWindow> {
   for (const [name, { from, to }] of Object.entries(axes))
     if (requireFinite(`${name}.from`, from) === requireFinite(`${name}.to`, to))
@@ -74,7 +75,8 @@ export function* processWindow(
     const changes = [axes.x.change(valueX), axes.y.change(valueY)];
     points[at] = pointOf(() => {
       const variant = changes.reduce((changed, change) => applyChange(changed, change, NOTHING), flow);
-      return judged(walkVariant(base, variant, limits), limits);
+      const findings = judged(walkVariant(base, variant, limits), limits);
+      return step === null ? findings : findings.filter((finding) => finding.step === step);
     });
     return true;
   };

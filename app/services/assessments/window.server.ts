@@ -12,7 +12,7 @@ import { trialGround, trialHead } from "./trial-ground.server.ts";
 
 /**
  * The verdict of an assessment's flow over two of its inputs, as the address asks. Nothing is drawn until two inputs are chosen;
- * a range left blank is the usual one about what is planned.
+ * a range left blank is the usual one about what is planned. `step` judges one step alone: elsewhere something else may bar the flow.
  */
 export async function windowOf(
   scope: ActorScope,
@@ -23,19 +23,27 @@ export async function windowOf(
   const { flow, limits } = ground.input;
   const choices = windowChoices(flow);
   const [x, y] = [readAxis(search, "x", choices), readAxis(search, "y", choices)];
-  const page = { head: trialHead(ground), inputs: choices.map(windowInput), x: x.asked, y: y.asked };
+  const steps = flow.steps.map(({ title }, index) => ({ number: index + 1, title }));
+  const step = steps.find(({ number }) => String(number) === search.get("step"))?.number ?? null;
+  const page = { head: trialHead(ground), inputs: choices.map(windowInput), steps, step, x: x.asked, y: y.asked };
   if (!x.choice || !y.choice) return { ...page, fault: null, drawing: null };
   if (x.choice === y.choice) return { ...page, fault: "Choose two different inputs.", drawing: null };
   if (!x.range || !y.range) return { ...page, fault: null, drawing: null };
-  const drawing = await drawn(flow, limits, { x: { ...x.choice, ...x.range }, y: { ...y.choice, ...y.range } });
+  const axes = { x: { ...x.choice, ...x.range }, y: { ...y.choice, ...y.range } };
+  const drawing = await drawn(flow, limits, axes, step);
   return typeof drawing === "string" ? { ...page, fault: drawing, drawing: null } : { ...page, fault: null, drawing };
 }
 
 type Axis = WindowChoice & { from: number; to: number };
 
-async function drawn(flow: FlowInput, limits: SiteLimits, axes: { x: Axis; y: Axis }): Promise<WindowDrawing | string> {
+async function drawn(
+  flow: FlowInput,
+  limits: SiteLimits,
+  axes: { x: Axis; y: Axis },
+  step: number | null,
+): Promise<WindowDrawing | string> {
   try {
-    return windowDrawing(await inTurns(processWindow(flow, limits, axes)), axes);
+    return windowDrawing(await inTurns(processWindow(flow, limits, axes, { step })), axes);
   } catch (error) {
     if (error instanceof EngineInputError) return `This cannot be computed: ${error.reason}.`;
     throw error;

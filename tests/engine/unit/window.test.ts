@@ -30,7 +30,7 @@ const axes = {
 };
 
 function windowOf(cells: number): ProcessWindow {
-  const search = processWindow(flow, limits, axes, cells);
+  const search = processWindow(flow, limits, axes, { cells });
   for (;;) {
     const next = search.next();
     if (next.done) return next.value;
@@ -67,7 +67,7 @@ describe("process window of Petrel, plated copper against silicon", () => {
   });
 
   it("can be left between two walks", () => {
-    const search = processWindow(flow, limits, axes, 8);
+    const search = processWindow(flow, limits, axes, { cells: 8 });
     expect(search.next().value).toEqual({ walks: 1 });
     expect(search.return({ x: [], y: [], points: [], walks: 0 }).done).toBe(true);
   });
@@ -75,7 +75,7 @@ describe("process window of Petrel, plated copper against silicon", () => {
   it("refuses an empty range and cells that cannot be halved", () => {
     const same = { ...axes.x, to: axes.x.from };
     expect(() => processWindow(flow, limits, { ...axes, x: same }).next()).toThrow(/empty/);
-    expect(() => processWindow(flow, limits, axes, 7).next()).toThrow(/multiple of 4/);
+    expect(() => processWindow(flow, limits, axes, { cells: 7 }).next()).toThrow(/multiple of 4/);
   });
 });
 
