@@ -43,6 +43,10 @@ export default [
       index("routes/_app/assessments/assessment.tsx"),
       route("working", "routes/_app/assessments/working.tsx"),
       route("compare", "routes/_app/assessments/compare.tsx"),
+      route("remedies", "routes/_app/assessments/remedies.tsx"),
+      route("carriers", "routes/_app/assessments/carriers.tsx"),
+      route("window", "routes/_app/assessments/window.tsx"),
+      route("carriers.csv", "routes/_app/assessments/carriers-csv.ts"),
     ]),
     ...prefix("carriers", [
       index("routes/_app/carriers/index.tsx"),

@@ -210,3 +210,28 @@ export {
   type TapeInput,
   type WaferKind,
 } from "./flow/handling-inputs.ts";
+
+// What would make it pass: carriers and bonds, smallest changes, process window
+export type { Catalogue, CatalogueMaterial, CatalogueTool } from "./trial/catalogue.ts";
+export { blocks, relativeMargin } from "./trial/margin.ts";
+export { bondSpans, type BondSpan } from "./finder/bond-spans.ts";
+export { findBonds, type BondSearch, type Misfit, type TriedBond, type WarpTarget } from "./finder/find-bonds.ts";
+export { withBond, type BondChoice } from "./finder/with-bond.ts";
+export {
+  applyChange,
+  framedSteps,
+  originsOf,
+  REMEDY_NOTE,
+  type FilmQuantity as ChangedFilmQuantity,
+  type FlowChange,
+  type StepQuantity,
+} from "./trial/change.ts";
+export {
+  findRemedies,
+  type Remedy,
+  type RemedyAnswer,
+  type RemedyProgress,
+  type Worsened,
+} from "./remedy/find-remedies.ts";
+export { processWindow, type ProcessWindow, type WindowAxis, type WindowPoint } from "./window/window.ts";
+export { contours, type ContourPoint } from "./window/contours.ts";

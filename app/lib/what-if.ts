@@ -1,5 +1,6 @@
 import type { FlowInput, StepInput } from "#app/engine/flow/model.ts";
 import type { Measured } from "#app/engine/measured.ts";
+import { tried as triedAt } from "#app/engine/trial/tried.ts";
 import type { Holding } from "#app/engine/vocabulary.ts";
 import type { FlowPlan, StepPlan } from "#app/schemas/flow-plan.ts";
 import type { WhatIfChange, WhatIfSnapshot } from "#app/schemas/what-if.ts";
@@ -9,12 +10,8 @@ import type { WhatIfChange, WhatIfSnapshot } from "#app/schemas/what-if.ts";
  * stored (on the server, when the person says so). Both must come to the same flow, which a test holds.
  */
 
-/** The quantity at the value tried: nobody measured it, its spread is taken to stay what it was. */
-export function tried(was: Measured | null, value: number): Measured {
-  const tolerance = was?.tolerance ?? null;
-  const spread = tolerance !== null && tolerance < Math.abs(value) ? tolerance : null;
-  return { value, tolerance: spread, source: "assumed", note: "from a what-if", on: null };
-}
+/** The quantity at the value tried. */
+export const tried = (was: Measured | null, value: number): Measured => triedAt(was, value, "from a what-if");
 
 /** The same change by the same place: a later one takes the place of an earlier. */
 export const placeOf = ({ step, field, film }: Pick<WhatIfChange, "step" | "field" | "film">): string =>

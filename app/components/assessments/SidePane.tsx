@@ -1,3 +1,4 @@
+import { Link } from "react-router";
 import { noBreak } from "#app/components/drawings/no-break.ts";
 import { SourceMark } from "#app/components/drawings/SourceMark.tsx";
 import { TitleBlock } from "#app/components/drawings/TitleBlock.tsx";
@@ -6,6 +7,7 @@ import type { AssessmentView } from "#app/lib/assessment-view.ts";
 import { BondList } from "./BondList.tsx";
 import { PaneSection } from "./PaneSection.tsx";
 import { RemedyList } from "./RemedyList.tsx";
+import { SmallestChanges } from "./SmallestChanges.tsx";
 import { StepLink } from "./StepLink.tsx";
 
 /** What follows from the answer: what clears it, which inputs matter, what was assumed, which bonds; and the title block. */
@@ -15,6 +17,7 @@ export function SidePane({ view }: { view: AssessmentView }) {
     <div className="flex flex-col max-wide:border-t max-wide:border-ink wide:border-l wide:border-ink">
       <div className="divide-y divide-line max-wide:tablet:grid max-wide:tablet:grid-cols-2 max-wide:tablet:divide-y-0">
         <PaneSection title="What clears it">
+          {remedies.length > 0 ? <SmallestChanges assessmentId={view.head.id} /> : null}
           <RemedyList remedies={remedies} />
         </PaneSection>
         {selected ? <Budget step={selected} /> : null}
@@ -42,6 +45,11 @@ export function SidePane({ view }: { view: AssessmentView }) {
         {bonds.length > 0 ? (
           <PaneSection title={bonds.length === 1 ? "The bond" : "The bonds"}>
             <BondList bonds={bonds} />
+            <p className="screen-only mt-2">
+              <Link to={`/assessments/${view.head.id}/carriers`} className="link">
+                Carriers and bonds that fit
+              </Link>
+            </p>
           </PaneSection>
         ) : null}
       </div>

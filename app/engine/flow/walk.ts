@@ -60,13 +60,14 @@ export function walkFlow(flow: FlowInput, limits: SiteLimits, options: WalkOptio
       const before = state;
       const walked = takeStep(flow.wafer, before, step, { field: stepField(index), metalHistory });
       state = walked.after;
-      return describe(flow, limits, { number: index + 1, step, before }, walked);
+      return describeStep(flow, limits, { number: index + 1, step, before }, walked);
     }),
   );
   return { steps };
 }
 
-function describe(
+/** A walked step with its shapes and what else is said of it. */
+export function describeStep(
   flow: FlowInput,
   limits: SiteLimits,
   place: Pick<StepState, "number" | "step" | "before">,

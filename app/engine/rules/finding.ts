@@ -50,6 +50,8 @@ export interface RuleContext {
   limits: SiteLimits;
   steps: StepState[];
   uncertainty: StepUncertainty[];
+  /** false leaves out the workings of shapes, which cost as much as the shapes: for trials that nobody looks at; default true */
+  workings?: boolean;
 }
 
 /** A handling rule. `judge` looks at one step and returns what it finds, nothing when the rule has no say there. */

@@ -1,4 +1,5 @@
 import { randomUUID } from "node:crypto";
+import type { EntityManager } from "@mikro-orm/postgresql";
 import { Flow } from "#app/db/entities/flow.ts";
 import { Silicon } from "#app/db/entities/silicon.ts";
 import type { FlowPlan } from "#app/schemas/flow-plan.ts";
@@ -57,25 +58,29 @@ function copyName(name: string, taken: Set<string>): string {
 /** People who copy the same flow at the same moment, at most. */
 const ATTEMPTS = 5;
 
-/** Copies a flow with all its steps into the same program; its assessments stay with the original. */
-export async function copyFlow(scope: ActorScope, id: string): Promise<Saved> {
-  let saved = await copyOnce(scope, id);
+/** What a copy has otherwise than its original, with the words for its history. */
+export type CopyChange = (em: EntityManager, plan: FlowPlan) => Promise<{ plan: FlowPlan; words: string }>;
+
+/** Copies a flow with all its steps into the same program, changed if so wished; its assessments stay with the original. */
+export async function copyFlow(scope: ActorScope, id: string, change: CopyChange | null = null): Promise<Saved> {
+  let saved = await copyOnce(scope, id, change);
   // Somebody who copied it in the same moment has taken the name: the next one is free.
   for (let attempt = 1; attempt < ATTEMPTS && saved.outcome === "name taken"; attempt++)
-    saved = await copyOnce(scope, id);
+    saved = await copyOnce(scope, id, change);
   return saved;
 }
 
-async function copyOnce(scope: ActorScope, id: string): Promise<Saved> {
+async function copyOnce(scope: ActorScope, id: string, change: CopyChange | null): Promise<Saved> {
   const { head, first } = await inScope(scope, async (em) => {
     const original = await findFlow(em, scope, id);
     const names = await em.find(Flow, { program: original.program.id }, { fields: ["name"] });
     const { plan } = await readPlan(em, original);
-    const { steps, ...rest } = plan;
+    const changed = change && (await change(em, plan));
+    const { steps, ...rest } = changed?.plan ?? plan;
     const name = copyName(original.name, new Set(names.map((flow) => flow.name)));
     return {
       head: { ...rest, program: original.program.id, name },
-      first: { steps, words: `Copied from ${original.name}` },
+      first: { steps, words: `Copied from ${original.name}${changed ? `. ${changed.words}` : ""}` },
     };
   });
   return createFlow(scope, head, first);
