@@ -43,6 +43,7 @@ export default [
       index("routes/_app/assessments/assessment.tsx"),
       route("working", "routes/_app/assessments/working.tsx"),
       route("compare", "routes/_app/assessments/compare.tsx"),
+      route("lot", "routes/_app/assessments/lot.tsx"),
     ]),
     ...prefix("carriers", [
       index("routes/_app/carriers/index.tsx"),

@@ -27,7 +27,7 @@ export function sharedBy(budget: readonly { input: string; source: SourceKind }[
 }
 
 /** Standard normal distribution function, absolute error below 7.5e-8 (Abramowitz & Stegun 1964, 26.2.17, from memory). */
-function normalDistribution(z: number): number {
+export function normalDistribution(z: number): number {
   const t = 1 / (1 + 0.2316419 * Math.abs(z));
   const tail =
     (Math.exp(-(z * z) / 2) / Math.sqrt(2 * Math.PI)) *
