@@ -1,7 +1,7 @@
+import { formatQuantity } from "#app/engine/units/format.ts";
 import type { Outcome } from "#app/engine/vocabulary.ts";
 import type { LotRecord, WaferAnswer } from "#app/schemas/lot.ts";
 import { micrometres } from "./assessment-figure.ts";
-import { bowText } from "./lot-words.ts";
 
 /** A wafer of a lot as a table shows it. */
 export interface SpreadRow {
@@ -22,6 +22,9 @@ export interface SpreadRow {
 
 const MISSING = "–";
 
+/** One place below the point in every row, so that a column can be read down. */
+const tenths = (value: number) => formatQuantity(value, "length", { unit: "µm", decimals: 1 });
+
 /** The wafers of a lot in the order of their slots. */
 export function spreadRows({ answers, thickness }: Pick<LotRecord, "answers" | "thickness">): SpreadRow[] {
   return answers.map((answer) => spreadRow(answer, thickness));
@@ -32,8 +35,8 @@ function spreadRow({ slot, bow, thickness, at, outcome, reason }: WaferAnswer, m
   const share = at && at.limit !== null ? at.warp / at.limit : null;
   return {
     slot,
-    bow: bowText(bow),
-    thickness: thick === null ? "as assessed" : micrometres(thick),
+    bow: tenths(bow),
+    thickness: thick === null ? "as assessed" : tenths(thick),
     step: at && `${at.step}, ${at.title}`,
     lies:
       at === null

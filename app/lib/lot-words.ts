@@ -63,16 +63,16 @@ const listed = (words: string[]) =>
 const capital = (text: string) => text.charAt(0).toUpperCase() + text.slice(1);
 
 /** What any lot comes to, in wafers of a full cassette. */
-export function expectedSentences({ step, title, share, lots, by }: ExpectedShare): string[] {
-  const [least, most] = lots.map(inWafers);
-  const range = least === most ? `of a single lot ${least}` : `of a single lot from ${least} to ${most}`;
-  return [
-    `With the tolerances given, ${inWafers(share)} of ${SLOTS} wafers of any lot ${wafersVerb(share)} expected beyond the tightest limit, that of step ${step}, ${title}; ${range}, in 95 lots of 100.`,
-    by,
-  ].filter((sentence) => sentence !== "");
+export function expectedSentences({ step, title, share, lots: [least, most], by }: ExpectedShare): string[] {
+  const place = `the tightest limit, that of step ${step}, ${title}`;
+  const of = (part: number) => inWafers(part);
+  const expected =
+    of(most) === "none"
+      ? `With the tolerances given, no wafer of any lot is expected beyond ${place}.`
+      : `With the tolerances given, ${of(share)} of ${SLOTS} wafers ${share * SLOTS < 1.5 ? "is" : "are"} expected beyond ${place}.`;
+  const range = of(least) === of(most) ? "" : `Of 95 lots in 100 it is between ${of(least)} and ${of(most)}.`;
+  return [expected, range, by].filter((sentence) => sentence !== "");
 }
-
-const wafersVerb = (share: number) => (share * SLOTS <= 1.5 ? "is" : "are");
 
 /** 'fewer than 1', 'about 3', 'nearly all'. */
 function inWafers(share: number): string {

@@ -41,6 +41,7 @@ const DOORS: Record<string, string> = {
   "/flows/:flowId/steps/:stepId": "302 404 200 200 200 200 404",
   "/assessments/:assessmentId": "302 404 200 200 200 200 404",
   "/assessments/:assessmentId/working": "302 404 200 200 200 200 404",
+  "/assessments/:assessmentId/lot": "302 404 200 200 200 200 404",
   "/carriers": "302 403 302 302 302 302 302",
   "/carriers/limits": "302 403 200 200 200 200 200",
   "/carriers/:kind": "302 403 200 200 200 200 200",

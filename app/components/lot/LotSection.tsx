@@ -24,7 +24,7 @@ export function LotSection({ lot }: { lot: LotRecord }) {
           , revision {revisionLetters(of.number)}.
         </p>
       </section>
-      <LotSpread lot={lot} />
+      <LotSpread lot={lot} folded />
     </>
   );
 }

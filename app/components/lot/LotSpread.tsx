@@ -6,8 +6,14 @@ import { SLOTS } from "#app/lib/cassette.ts";
 import { spreadSentences } from "#app/lib/lot-words.ts";
 import type { LotRecord } from "#app/schemas/lot.ts";
 
+interface Props {
+  lot: Pick<LotRecord, "answers" | "thickness">;
+  /** the table opens on demand, where more stands below it */
+  folded?: boolean;
+}
+
 /** How many wafers of a lot miss a limit, and each by its slot. Nothing where only the mean is known. */
-export function LotSpread({ lot }: { lot: Pick<LotRecord, "answers" | "thickness"> }) {
+export function LotSpread({ lot, folded = false }: Props) {
   if (lot.answers.length === 0) return null;
   const rows = spreadRows(lot);
   const [said = "", ...more] = spreadSentences(lot.answers);
@@ -32,38 +38,51 @@ export function LotSpread({ lot }: { lot: Pick<LotRecord, "answers" | "thickness
           drawing.
         </p>
       </div>
-      <div className="overflow-x-auto" tabIndex={0} role="region" aria-label="Wafers by slot">
-        <table className="table border-t border-ink">
-          <caption className="sr-only">Wafers by slot</caption>
-          <thead>
-            <tr>
-              <th scope="col" className="num">
-                Slot
-              </th>
-              <th scope="col" className="num">
-                Bow in
-              </th>
-              <th scope="col" className="num max-tablet:hidden print:table-cell">
-                Thickness in
-              </th>
-              <th scope="col">Tightest at step</th>
-              <th scope="col" className="max-tablet:hidden print:table-cell">
-                Lies
-              </th>
-              <th scope="col" className="num max-tablet:hidden print:table-cell">
-                Tool takes
-              </th>
-              <th scope="col">Finding</th>
-            </tr>
-          </thead>
-          <tbody>
-            {rows.map((row) => (
-              <Row key={row.slot} row={row} />
-            ))}
-          </tbody>
-        </table>
-      </div>
+      {folded ? (
+        <details className="border-t border-line">
+          <summary className="link w-fit cursor-pointer px-4 py-3 tablet:px-6">Each wafer by its slot</summary>
+          <Table rows={rows} />
+        </details>
+      ) : (
+        <Table rows={rows} />
+      )}
     </section>
+  );
+}
+
+function Table({ rows }: { rows: SpreadRow[] }) {
+  return (
+    <div className="overflow-x-auto" tabIndex={0} role="region" aria-label="Wafers by slot">
+      <table className="table border-t border-ink">
+        <caption className="sr-only">Wafers by slot</caption>
+        <thead>
+          <tr>
+            <th scope="col" className="num">
+              Slot
+            </th>
+            <th scope="col" className="num">
+              Bow in
+            </th>
+            <th scope="col" className="num max-tablet:hidden print:table-cell">
+              Thickness in
+            </th>
+            <th scope="col">Tightest at step</th>
+            <th scope="col" className="max-tablet:hidden print:table-cell">
+              Lies
+            </th>
+            <th scope="col" className="num max-tablet:hidden print:table-cell">
+              Tool takes
+            </th>
+            <th scope="col">Finding</th>
+          </tr>
+        </thead>
+        <tbody>
+          {rows.map((row) => (
+            <Row key={row.slot} row={row} />
+          ))}
+        </tbody>
+      </table>
+    </div>
   );
 }
 

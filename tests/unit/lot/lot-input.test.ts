@@ -53,7 +53,7 @@ describe("a lot in place of what a flow was assessed for", () => {
       const { flow, limits } = inputOf("Tern");
       const [receive] = flow.steps;
       if (!receive) throw new Error("the flow receives its wafers");
-      const impossible = {
+      const thin = {
         ...receive,
         kind: "grind" as const,
         adds: [],
@@ -113,9 +113,9 @@ describe("the wafers of a lot", () => {
   });
 
   it("cannot be judged where nothing can be computed, and say why", () => {
-    const thin = at(0.02);
+    const impossible = at(0.02);
     expect(impossible).toMatchObject({ outcome: "cannot judge", at: null });
-        expect(impossible.reason).toMatch(/^This bow .*\.$/);
+    expect(impossible.reason).toMatch(/^This bow .*\.$/);
   });
 });
 
