@@ -33,7 +33,7 @@ export function LotSpread({ lot, folded = false }: Props) {
             label={`Warp of each wafer as a share of its tightest limit, by slot. ${said}`}
           />
         </div>
-        <p className="text-label text-quiet">
+        <p className="mt-2 text-label text-quiet">
           Warp as a share of the limit. Dot: clear. Ring: near the limit. Square: beyond it. Triangle: beyond the
           drawing.
         </p>

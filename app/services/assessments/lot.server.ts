@@ -128,6 +128,16 @@ function beforeOf({ engineVersion, result, input }: Found): AssessmentResult {
   return computed.outcome === "computed" ? computed.result : result;
 }
 
+/** The steps that are judged differently: another thickness that comes in is no such change. */
+function judgedAnew(movement: Movement): Movement {
+  if (movement.outcome !== "computed") return movement;
+  const moved = movement.moved.filter(
+    ({ before, after }) =>
+      before?.outcome !== after?.outcome || before?.required !== after?.required || before?.heldBy !== after?.heldBy,
+  );
+  return { ...movement, moved };
+}
+
 /** Assesses a lot with its own figures on everything else that the assessment rests on, and stores nothing. */
 export async function tryLot(
   scope: ActorScope,
@@ -141,7 +151,7 @@ export async function tryLot(
     outcome: "computed",
     lot,
     summary: answerSummary(assessed.result),
-    movement: movementOf(beforeOf(found), assessed.result),
+    movement: judgedAnew(movementOf(beforeOf(found), assessed.result)),
     answers: assessed.answers,
   };
 }
