@@ -47,6 +47,7 @@ export default [
       route("carriers", "routes/_app/assessments/carriers.tsx"),
       route("window", "routes/_app/assessments/window.tsx"),
       route("carriers.csv", "routes/_app/assessments/carriers-csv.ts"),
+      route("lot", "routes/_app/assessments/lot.tsx"),
     ]),
     ...prefix("carriers", [
       index("routes/_app/carriers/index.tsx"),

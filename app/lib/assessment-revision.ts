@@ -10,3 +10,8 @@ export function revisionLetters(number: number): string {
   }
   return letters;
 }
+
+/** The revision of its flow that an assessment is; one of a lot is none. */
+export function revisionOf({ number, lot }: { number: number; lot: { name: string } | null }): string {
+  return lot === null ? revisionLetters(number) : "none";
+}

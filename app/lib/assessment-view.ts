@@ -6,10 +6,11 @@ import type { Finding } from "#app/engine/rules/finding.ts";
 import { formatWithUncertainty } from "#app/engine/units/format.ts";
 import type { Outcome } from "#app/engine/vocabulary.ts";
 import type { AssessmentResult, BondResult, StepResult } from "#app/schemas/assessment-result.ts";
+import type { LotRecord } from "#app/schemas/lot.ts";
 import { celsius, figureText, micrometres } from "./assessment-figure.ts";
 import { bySeverity, figureWorkingPath } from "./assessment-finding.ts";
 import { assessmentNumber } from "./assessment-number.ts";
-import { revisionLetters } from "./assessment-revision.ts";
+import { revisionOf } from "./assessment-revision.ts";
 import { selectedStep, stepAskedFor, type SelectedStep } from "./assessment-selected.ts";
 import { isRolled } from "./lying-as.ts";
 import { stepRows, type StepRow } from "./assessment-steps.ts";
@@ -19,7 +20,7 @@ import { warpCourse, type CourseStep } from "./warp-course.ts";
 /** What a stored assessment says of itself, beside its result. */
 export interface AssessmentHead {
   id: string;
-  /** counts within the flow */
+  /** counts within the flow; that of a lot is the number of the assessment that it is of */
   number: number;
   /** counts within the program */
   documentNumber: number;
@@ -31,6 +32,8 @@ export interface AssessmentHead {
   createdBy: string;
   outOfDate: boolean;
   mayAssess: boolean;
+  /** the lot that it is of; null for an assessment of the flow itself */
+  lot: LotRecord | null;
 }
 
 /** A figure of the answer, with a link to where it comes from. */
@@ -106,12 +109,12 @@ export function titleBlock(head: AssessmentHead, documentType: string, page: str
   return {
     owner: SITE_NAME,
     documentType,
-    title: head.flow.name,
+    title: head.lot ? `${head.flow.name}, lot ${head.lot.name}` : head.flow.name,
     prepared: head.createdBy,
     checked: "not yet",
     released: "not yet",
     number: assessmentNumber(head.program.slug, head.documentNumber),
-    revision: revisionLetters(head.number),
+    revision: revisionOf(head),
     status: "Draft",
     date: head.createdAt.slice(0, 10),
     language: "en",

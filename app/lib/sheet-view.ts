@@ -13,7 +13,7 @@ import {
 import type { AssessmentResult, BondResult, ShapeResult, StepResult } from "#app/schemas/assessment-result.ts";
 import { celsius } from "./assessment-figure.ts";
 import { assessmentNumber } from "./assessment-number.ts";
-import { revisionLetters } from "./assessment-revision.ts";
+import { revisionOf } from "./assessment-revision.ts";
 import { isRolled, lyingAs } from "./lying-as.ts";
 import { sentenceCase } from "./assessment-steps.ts";
 import { titleBlock, type AssessmentHead } from "./assessment-view.ts";
@@ -54,6 +54,8 @@ export interface SheetView {
   assessmentId: string;
   number: string;
   revision: string;
+  /** the one lot that it is for; null for every lot of the flow */
+  lot: string | null;
   program: string;
   flow: string;
   outcome: Outcome;
@@ -85,7 +87,8 @@ export function sheetView(head: AssessmentHead, result: AssessmentResult): Sheet
   return {
     assessmentId: head.id,
     number: assessmentNumber(head.program.slug, head.documentNumber),
-    revision: revisionLetters(head.number),
+    revision: revisionOf(head),
+    lot: head.lot?.name ?? null,
     program: head.program.name,
     flow: head.flow.name,
     outcome: verdict.outcome,

@@ -103,7 +103,7 @@ async function flowsOf(
      join program on program.id = flow.program_id
      left join lateral (
        select id, number, outcome, created_at from assessment
-       where assessment.flow_id = flow.id order by number desc limit 1
+       where assessment.flow_id = flow.id and lot is null order by number desc limit 1
      ) newest on true
      where flow.program_id in (?)`,
     [programs],

@@ -4,16 +4,23 @@ import { RunAgain } from "./RunAgain.tsx";
 
 /** What can be done with an assessment. One that is out of date is run again rather than printed. */
 export function AssessmentActions({ head, phone = false }: { head: AssessmentHead; phone?: boolean }) {
-  const { mayAssess, outOfDate } = head;
+  const { outOfDate, lot } = head;
+  // A lot's assessment is no revision: its flow is changed, run and compared from the assessment that it is of.
+  const mayAssess = head.mayAssess && lot === null;
   const grow = phone ? "flex-1" : "";
   return (
     <>
+      {phone || lot ? null : (
+        <Link to={`/assessments/${head.id}/lot`} className="btn">
+          This lot
+        </Link>
+      )}
       {mayAssess ? (
         <Link to={`/flows/${head.flow.id}`} className={`btn ${grow}`}>
           Change the flow
         </Link>
       ) : null}
-      {phone ? null : (
+      {phone || lot ? null : (
         <Link to={`/assessments/${head.id}/compare`} className="btn">
           Compare
         </Link>

@@ -3,6 +3,7 @@ import { Cautions } from "#app/components/cautions/Cautions.tsx";
 import { AnswerLine } from "#app/components/drawings/AnswerLine.tsx";
 import { chooseExaggeration } from "#app/components/drawings/choose-exaggeration.ts";
 import { StepStrip } from "#app/components/drawings/StepStrip.tsx";
+import { LotSection } from "#app/components/lot/LotSection.tsx";
 import type { AnswerFigureView, AssessmentView } from "#app/lib/assessment-view.ts";
 import { stepPath } from "#app/lib/step-path.ts";
 import type { OutOfDate } from "#app/schemas/assessment-changes.ts";
@@ -35,6 +36,7 @@ export function AssessmentPage({ view, changed, refused }: Props) {
       <AssessmentTop head={head} refused={refused} />
       <article className="frame max-tablet:-mx-4 max-tablet:border-x-0">
         <AnswerLine outcome={outcome} where={where ?? undefined} sentences={sentences} figures={figures.map(linked)} />
+        {head.lot ? <LotSection lot={head.lot} /> : null}
         {head.outOfDate ? <OutOfDateSection head={head} changed={changed} /> : null}
         <div className="border-t border-ink max-tablet:hidden">
           <StepStrip
@@ -72,11 +74,17 @@ export function AssessmentPage({ view, changed, refused }: Props) {
         Engine {head.engineVersion}, inputs of {head.createdAt.slice(0, 16).replace("T", " ")} UTC, fingerprint{" "}
         {head.inputHash.slice(0, 12)}. ± is the expanded uncertainty, k = 2, from the tolerances given.
       </p>
-      <p className="screen-only mt-2 tablet:hidden">
-        <Link to={`/assessments/${head.id}/compare`} className="link">
-          Compare with another assessment
-        </Link>
-      </p>
+      {head.lot ? null : (
+        <p className="screen-only mt-2 tablet:hidden">
+          <Link to={`/assessments/${head.id}/compare`} className="link">
+            Compare with another assessment
+          </Link>
+          {"; "}
+          <Link to={`/assessments/${head.id}/lot`} className="link">
+            try a lot
+          </Link>
+        </p>
+      )}
       <div className="screen-only sticky bottom-0 z-10 -mx-4 mt-4 flex gap-2 border-t border-ink bg-surface px-4 py-2 tablet:hidden">
         <AssessmentActions head={head} phone />
       </div>

@@ -23,7 +23,17 @@ export function AssessmentTop({ head, refused }: { head: AssessmentHead; refused
             {head.flow.name}
           </Link>
           <span aria-hidden="true"> / </span>
-          <span aria-current="page">Assessment {head.number}</span>
+          {head.lot ? (
+            <>
+              <Link to={`/assessments/${head.lot.of.id}`} className="link text-quiet">
+                Assessment {head.number}
+              </Link>
+              <span aria-hidden="true"> / </span>
+              <span aria-current="page">Lot {head.lot.name}</span>
+            </>
+          ) : (
+            <span aria-current="page">Assessment {head.number}</span>
+          )}
         </nav>
         <div className="ml-auto flex flex-wrap gap-2 max-tablet:hidden">
           <AssessmentActions head={head} />

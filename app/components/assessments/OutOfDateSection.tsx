@@ -31,7 +31,7 @@ export function OutOfDateSection({ head, changed }: Props) {
             <span className="text-quiet">What stands on this page is as it was assessed.</span>
           </p>
         </div>
-        {head.mayAssess ? (
+        {head.mayAssess && head.lot === null ? (
           <div className="screen-only">
             <RunAgain primary />
           </div>

@@ -144,10 +144,10 @@ export function leftOut(judged: readonly number[]): string[] {
     ...(rules.length > 0
       ? [`Rules not judged yet: ${rules.map(({ number, title }) => `${number}, ${title}`).join("; ")}.`]
       : []),
-    "An incoming shape other than that of its films: measured bow and the wafer’s own crystal shape do not enter a flow.",
+    "An incoming shape other than that of films: a lot’s measured bow is taken as theirs, the wafer’s own crystal shape does not enter a flow.",
     "Shapes are those of a free wafer without weight: sag is added to warp, not solved together with it.",
     "Narrow parallel lines, which pull along their length only: films count by the area that they cover.",
-    "Spread over the wafers of a lot, split legs and rework loops.",
+    "Split legs and rework loops.",
     "The shape of a pair that is bonded by its back side, and of a wafer between two carriers.",
     "Moulded or reconstituted wafers, panels and packages: they are out of scope, whatever figures are typed.",
   ];

@@ -11,8 +11,8 @@ export function SheetIdentity({ sheet }: { sheet: SheetView }) {
       <p>
         <strong>Draft, not released: not for the floor</strong>
         <br />
-        Handling-risk sheet <strong className="whitespace-nowrap">{sheet.number}</strong>, revision {sheet.revision},
-        program {sheet.program}
+        Handling-risk sheet <strong className="whitespace-nowrap">{sheet.number}</strong>,{" "}
+        {sheet.lot === null ? `revision ${sheet.revision}` : `for lot ${sheet.lot} alone`}, program {sheet.program}
         {sheet.changedSince === null ? null : (
           <>
             <br />
@@ -21,7 +21,13 @@ export function SheetIdentity({ sheet }: { sheet: SheetView }) {
         )}
       </p>
       <p className="flex flex-col gap-[0.5mm] tablet:items-end">
-        <WriteIn label="Lot" width="38mm" />
+        {sheet.lot === null ? (
+          <WriteIn label="Lot" width="38mm" />
+        ) : (
+          <span>
+            Lot <strong>{sheet.lot}</strong>
+          </span>
+        )}
         <WriteIn label="Wafers" width="38mm" />
       </p>
     </div>

@@ -5,7 +5,8 @@ import { ENGINE_VERSION } from "#app/engine/version.ts";
 import { mayInProgram } from "#app/policies/permissions.ts";
 import type { AssessmentResult } from "#app/schemas/assessment-result.ts";
 import type { FlowDetail } from "#app/schemas/flow-view.ts";
-import { notFound } from "#app/server/problem.server.ts";
+import type { LotRecord } from "#app/schemas/lot.ts";
+import { notFound, problem } from "#app/server/problem.server.ts";
 import { inScope, type ActorScope } from "#app/server/scope.server.ts";
 import { requireInProgram } from "../permission.server.ts";
 import { idFrom } from "../uuid.server.ts";
@@ -47,14 +48,18 @@ export async function runAssessment(scope: ActorScope, flowId: string): Promise<
   });
 }
 
-/** Runs an assessment's flow again, as the flow is now. */
+const LOT_AGAIN =
+  "This assessment is of one lot, and its flow is not run again from here. Open the flow, assess it, and try the lot there.";
+
+/** Runs an assessment's flow again, as the flow is now; refused for a lot's. */
 export async function runAgain(scope: ActorScope, assessmentId: string | undefined): Promise<Ran> {
-  const flowId = await inScope(scope, async (em) => (await findAssessment(em, scope, assessmentId)).flow.id);
-  return runAssessment(scope, flowId);
+  const { flow, lot } = await inScope(scope, (em) => findAssessment(em, scope, assessmentId));
+  if (lot) throw problem(409, LOT_AGAIN);
+  return runAssessment(scope, flow.id);
 }
 
-/** The numbers after the newest ones of flow and program. Two people who run at once wait for each other until the end. */
-async function nextNumbers(em: EntityManager, { id, program }: Pick<FlowDetail, "id" | "program">) {
+/** The numbers after the newest ones of flow and program, lots left out of the first. Two people who run at once wait for each other until the end. */
+export async function nextNumbers(em: EntityManager, { id, program }: Pick<FlowDetail, "id" | "program">) {
   await em.execute("select pg_advisory_xact_lock(hashtextextended(?, 0))", [`assessment numbers of ${program.id}`]);
   const [newest] = await em.execute<{ number: number; document: number }[]>(
     `select coalesce(max(number) filter (where flow_id = ?), 0) as number, coalesce(max(document_number), 0) as document
@@ -80,6 +85,8 @@ export interface AssessmentDetail {
   /** the flow, or something that it uses, has been changed since: what stands here is of then */
   outOfDate: boolean;
   mayAssess: boolean;
+  /** the lot that it is of; null for an assessment of the flow itself */
+  lot: LotRecord | null;
 }
 
 /** The assessment that an id names, if the person may see it. */
@@ -98,8 +105,10 @@ export async function findAssessment(em: EntityManager, scope: ActorScope, id: s
 export async function getAssessment(scope: ActorScope, id: string | undefined): Promise<AssessmentDetail> {
   return inScope(scope, async (em) => {
     const assessment = await findAssessment(em, scope, id);
-    const { program, flow } = assessment;
+    const { program, flow, lot } = assessment;
     const { input } = await presentFlow(em, scope, flow.id);
+    // A lot rests on its own figures and, for the rest, on what the assessment that it is of rests on.
+    const of = lot ? await findAssessment(em, scope, lot.of.id) : assessment;
     return {
       id: assessment.id,
       number: assessment.number,
@@ -112,10 +121,11 @@ export async function getAssessment(scope: ActorScope, id: string | undefined): 
       createdBy: assessment.createdBy.name,
       result: assessment.result,
       outOfDate: isOutOfDate(
-        { engineVersion: assessment.engineVersion, inputHash: assessment.inputHash, input: assessment.input.$ },
+        { engineVersion: assessment.engineVersion, inputHash: of.inputHash, input: of.input.$ },
         input,
       ),
       mayAssess: mayInProgram(scope.actor, "run assessments", program.id),
+      lot: lot ?? null,
     };
   });
 }

@@ -124,7 +124,7 @@ async function newestOf(em: EntityManager, flowIds: string[]): Promise<Map<strin
   if (flowIds.length === 0) return new Map();
   const rows = await em.execute<Newest[]>(
     `select distinct on (flow_id) id, flow_id, number, outcome, created_at, input_hash, engine_version, result
-       from assessment where flow_id in (?) order by flow_id, number desc`,
+       from assessment where flow_id in (?) and lot is null order by flow_id, number desc`,
     [flowIds],
   );
   return new Map(rows.map((row) => [row.flow_id, row]));

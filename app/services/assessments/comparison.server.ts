@@ -1,12 +1,13 @@
 import type { Outcome } from "#app/engine/vocabulary.ts";
 import { inputChanges } from "#app/lib/input-changes.ts";
 import type { AssessmentName, ComparedAssessment, ComparisonOffer } from "#app/schemas/assessment-comparison.ts";
-import { notFound } from "#app/server/problem.server.ts";
+import { notFound, problem } from "#app/server/problem.server.ts";
 import { inScope, type ActorScope } from "#app/server/scope.server.ts";
 import { escapeLike } from "../like.server.ts";
 import { findAssessment } from "./assessments.server.ts";
 
 const OFFERED = 50;
+const LOTS_APART = "A lot stands beside the assessment that it is of on its own page, and is no revision to compare.";
 
 interface Row {
   id: string;
@@ -40,14 +41,15 @@ export async function comparisonOffer(
 ): Promise<ComparisonOffer> {
   return inScope(scope, async (em) => {
     const asked = await findAssessment(em, scope, assessmentId);
+    if (asked.lot) throw problem(409, LOTS_APART);
     const sameFlow = await em.execute<Row[]>(
-      `select ${COLUMNS} from assessment where flow_id = ? and id <> ? order by number desc limit ${OFFERED}`,
+      `select ${COLUMNS} from assessment where flow_id = ? and id <> ? and lot is null order by number desc limit ${OFFERED}`,
       [asked.flow.id, asked.id],
     );
     const otherFlows = await em.execute<Row[]>(
       `select * from (
          select distinct on (flow_id) ${COLUMNS} from assessment
-          where program_id = ? and flow_id <> ? and flow_name ilike ?
+          where program_id = ? and flow_id <> ? and lot is null and flow_name ilike ?
           order by flow_id, number desc
        ) newest order by flow_name limit ${OFFERED}`,
       [asked.program.id, asked.flow.id, `%${escapeLike(query)}%`],
@@ -56,6 +58,7 @@ export async function comparisonOffer(
       (withId === asked.id ? null : withId) ?? sameFlow.find(({ number }) => number < asked.number)?.id ?? null;
     const other = otherId === null ? null : await findAssessment(em, scope, otherId);
     // What is compared has to be of one customer.
+    if (other?.lot) throw problem(409, LOTS_APART);
     if (other && other.program.id !== asked.program.id) throw notFound("assessment");
     return {
       asked: headOf(asked),

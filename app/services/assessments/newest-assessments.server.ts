@@ -24,12 +24,12 @@ const LISTED = [
   "createdBy.name",
 ] as const;
 
-/** A page of the newest assessment of each flow that the person may see: those that a sheet would be printed from. */
+/** A page of the newest assessment of each flow that the person may see: those that a sheet would be printed from. Lots are none. */
 export async function listNewestAssessments(scope: ActorScope, params: ListParams): Promise<ListPage<AssessmentRow>> {
   requireInSomeProgram(scope, "see the work");
   return inScope(scope, async (em) => {
     const newest = await em.execute<{ id: string }[]>(
-      "select distinct on (flow_id) id from assessment order by flow_id, number desc",
+      "select distinct on (flow_id) id from assessment where lot is null order by flow_id, number desc",
     );
     const outcome = OUTCOMES.find((word) => word === params.filters["outcome"]);
     const [assessments, total] = await em.findAndCount(

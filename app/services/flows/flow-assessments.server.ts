@@ -27,7 +27,7 @@ export async function flowAssessments(
   const rows = await em.execute<Row[]>(
     `select a.id, a.number, a.outcome, a.result -> 'sentences' as sentences, a.created_at, p.name
        from assessment a join person p on p.id = a.created_by_id
-      where a.flow_id = ? order by a.number desc limit ${SHOWN}`,
+      where a.flow_id = ? and a.lot is null order by a.number desc limit ${SHOWN}`,
     [flow.id],
   );
   const stale = await outOfDateAmong(

@@ -4,10 +4,12 @@ import { stepRows, type StepRow } from "#app/lib/flow-rows.ts";
 import { mayOnSite } from "#app/policies/permissions.ts";
 import type { FlowHistory } from "#app/schemas/flow-plan.ts";
 import type { FlowAssessmentRow } from "#app/schemas/flow-view.ts";
+import type { FlowLotRow } from "#app/schemas/lot.ts";
 import type { RecordStamp } from "#app/schemas/record-stamp.ts";
 import { inScope, type ActorScope } from "#app/server/scope.server.ts";
 import { idFrom } from "../uuid.server.ts";
 import { flowAssessments } from "./flow-assessments.server.ts";
+import { flowLots } from "./flow-lots.server.ts";
 import { readFlow } from "./read-flow.server.ts";
 import { flowHistory } from "./revisions.server.ts";
 
@@ -26,6 +28,8 @@ export interface FlowPage {
   plan: ReturnType<typeof planColumns>;
   /** newest first */
   assessments: FlowAssessmentRow[];
+  /** kept lots, newest first */
+  lots: FlowLotRow[];
   /** null for those who may only read */
   history: FlowHistory | null;
   stamp: RecordStamp;
@@ -38,11 +42,12 @@ export interface FlowPage {
 /** One flow with its rows, its plan to draw and its assessments, newest first. */
 export async function flowPage(scope: ActorScope, flowId: string | undefined): Promise<FlowPage> {
   const id = idFrom(flowId, "flow");
-  const { flow, assessments, history } = await inScope(scope, async (em) => {
+  const { flow, assessments, lots, history } = await inScope(scope, async (em) => {
     const found = await readFlow(em, scope, id);
     return {
       flow: found,
       assessments: await flowAssessments(em, scope, found),
+      lots: await flowLots(em, id),
       history: found.mayEdit ? await flowHistory(em, id) : null,
     };
   });
@@ -61,6 +66,7 @@ export async function flowPage(scope: ActorScope, flowId: string | undefined): P
     rows: stepRows(steps, incomingThickness),
     plan: planColumns(steps, incomingThickness),
     assessments,
+    lots,
     history,
     stamp: flow.stamp,
     mayEdit: flow.mayEdit,

@@ -46,7 +46,7 @@ export async function listFlows(scope: ActorScope, params: ListParams): Promise<
     const steps = await em.find(FlowStep, { flow: { $in: ids } }, { fields: ["id", "flow"] });
     const assessments = await em.find(
       Assessment,
-      { flow: { $in: ids } },
+      { flow: { $in: ids }, lotNumber: 0 },
       { fields: ["id", "flow", "number", "outcome", "createdAt"], orderBy: { number: "asc" } },
     );
     // Later ones overwrite earlier ones, so the newest of each flow is left.

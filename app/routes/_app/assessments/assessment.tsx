@@ -18,7 +18,7 @@ export async function loader({ context, params, url }: Route.LoaderArgs) {
   const { result, ...head } = await getAssessment(scope, params.assessmentId);
   return {
     view: assessmentView(head, result, url.searchParams.get("step")),
-    changed: head.outOfDate ? await whatChanged(scope, head.id) : null,
+    changed: head.outOfDate ? await whatChanged(scope, head.lot?.of.id ?? head.id) : null,
   };
 }
 

@@ -2,6 +2,7 @@ import { data, Link, redirect, type ShouldRevalidateFunctionArgs } from "react-r
 import { FlowAnswer } from "#app/components/flows/FlowAnswer.tsx";
 import { FlowConflictNotice } from "#app/components/flows/FlowConflictNotice.tsx";
 import { FlowFigures } from "#app/components/flows/FlowFigures.tsx";
+import { FlowLots } from "#app/components/flows/FlowLots.tsx";
 import { FlowPlan } from "#app/components/flows/FlowPlan.tsx";
 import { FlowSteps, STEPS_FORM } from "#app/components/flows/FlowSteps.tsx";
 import { IntentForm } from "#app/components/flows/IntentForm.tsx";
@@ -97,6 +98,7 @@ export default function FlowRoute({ loaderData: flow, actionData }: Route.Compon
       )}
       <div className="frame">
         <FlowAnswer assessments={assessments} mayAssess={mayAssess} />
+        <FlowLots lots={flow.lots} />
         <FlowFigures figures={flowFigures(flow)} />
         {flow.rows.length > 0 && (
           <div className="border-t border-ink max-tablet:hidden">
