@@ -47,6 +47,9 @@ const OTHER: Record<string, InputProperty> = {
   release: { label: "Release" },
   atPeak: { label: "When hot" },
   name: { label: "Name" },
+  meanExpansionOver: { label: "Expansion is a mean over" },
+  from: { label: "Expansion is a mean from", dimension: "temperature", unit: "°C" },
+  to: { label: "Expansion is a mean to", dimension: "temperature", unit: "°C" },
 };
 
 const TABLES: Partial<Record<InputRecord, Record<string, InputProperty>>> = {

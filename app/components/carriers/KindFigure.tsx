@@ -1,3 +1,4 @@
+import { softensAt } from "#app/lib/adhesive-bands.ts";
 import type { KindPageData } from "#app/lib/kind-data.ts";
 import { PairTrialSection } from "./PairTrialSection.tsx";
 import { TemperatureBand } from "./TemperatureBand.tsx";
@@ -8,12 +9,12 @@ export function KindFigure(data: KindPageData) {
     case "carriers":
       return data.trial && <PairTrialSection trial={data.trial} />;
     case "bonding-materials": {
-      const { softening, flows, temperatureLimit, bondTemperature, releaseTemperature } = data.record;
+      const { flows, temperatureLimit, bondTemperature, releaseTemperature } = data.record;
       return (
         <div className="px-6 pb-6 max-tablet:hidden">
           <TemperatureBand
             temperatures={{
-              softening: softening?.value ?? null,
+              softening: softensAt(data.record),
               flows,
               limit: temperatureLimit.value,
               margin: data.site.adhesiveMargin,

@@ -4,6 +4,7 @@ import { AssessmentDocumentNumber } from "./2026-12-02-assessment-document-numbe
 import { FlowHandling } from "./2026-12-03-flow-handling.ts";
 import { FlowRevisionsAndTemplates } from "./2026-12-03-flow-revisions-and-templates.ts";
 import { LibraryForRules } from "./2026-12-04-library-for-rules.ts";
+import { PhysicsInputs } from "./2026-12-05-physics-inputs.ts";
 
 /** Every migration in the order in which it runs. */
 export const migrations = [
@@ -13,4 +14,5 @@ export const migrations = [
   { name: "2026-12-03-flow-revisions-and-templates", class: FlowRevisionsAndTemplates },
   { name: "2026-12-03-flow-handling", class: FlowHandling },
   { name: "2026-12-04-library-for-rules", class: LibraryForRules },
+  { name: "2026-12-05-physics-inputs", class: PhysicsInputs },
 ];

@@ -19,7 +19,10 @@ import {
 } from "#app/lib/library-handling.ts";
 import type { FlowDetail, StepDetail } from "#app/schemas/flow-view.ts";
 
-/** Flows and library entities as the engine takes them: plain, with the columns that it knows. */
+/**
+ * Flows and library entities as the engine takes them: plain, with the columns that it knows. A column that is blank is null, not
+ * left out, so that a stored assessment can tell when somebody fills it in.
+ */
 
 export function filmInput({ id, name, kind, ...film }: Film): FilmInput {
   return {
@@ -30,12 +33,14 @@ export function filmInput({ id, name, kind, ...film }: Film): FilmInput {
     poissonsRatio: film.poissonsRatio,
     expansion: film.expansion,
     yieldStress: film.yieldStress ?? null,
+    zeroStressTemperature: film.zeroStressTemperature ?? null,
     temperatureLimit: film.temperatureLimit ?? null,
     ...filmHandlingOf(film.handling),
   };
 }
 
 export function carrierInput({ id, name, material, ...carrier }: Carrier): CarrierInput {
+  const { meanExpansionFrom: from, meanExpansionTo: to } = carrier;
   return {
     id,
     name,
@@ -45,6 +50,7 @@ export function carrierInput({ id, name, material, ...carrier }: Carrier): Carri
     youngsModulus: carrier.youngsModulus,
     poissonsRatio: carrier.poissonsRatio,
     expansion: carrier.expansion ?? null,
+    meanExpansionOver: typeof from === "number" && typeof to === "number" ? { from, to } : null,
     temperatureLimit: carrier.temperatureLimit,
     ...carrierHandlingOf(carrier),
   };
@@ -59,6 +65,8 @@ export function bondingMaterialInput({ id, name, ...material }: BondingMaterial)
     expansionBelow: material.expansionBelow,
     expansionAbove: material.expansionAbove,
     softening: material.softening ?? null,
+    glassTransition: material.glassTransition ?? null,
+    flowPoint: material.flowPoint ?? null,
     flows: material.flows,
     bondTemperature: material.bondTemperature,
     temperatureLimit: material.temperatureLimit,
