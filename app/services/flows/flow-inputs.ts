@@ -8,8 +8,10 @@ import type {
   EquipmentInput,
   FilmInput,
   FlowInput,
+  IncomingShape,
   StepInput,
 } from "#app/engine/flow/model.ts";
+import { incomingFromBows } from "#app/engine/flow/silicon.ts";
 import { bondHandlingOf, stepHandlingOf } from "#app/lib/flow-handling.ts";
 import {
   bondingMaterialHandlingOf,
@@ -91,7 +93,7 @@ export function equipmentInput({ id, name, ...tool }: Equipment): EquipmentInput
 
 /** The flow as the engine takes it, complete in itself. */
 export function flowInputOf(
-  flow: Pick<FlowDetail, "name" | "silicon" | "incomingThickness" | "waferKind" | "gateBow" | "gateWarp" | "steps">,
+  flow: Pick<FlowDetail, Exclude<keyof FlowDetail, "id" | "note" | "program" | "stamp" | "mayEdit" | "mayAssess">>,
 ): FlowInput {
   const { name, diameter, orientation } = flow.silicon;
   const { waferKind, gateBow: bow, gateWarp: warp } = flow;
@@ -102,11 +104,21 @@ export function flowInputOf(
       diameter,
       orientation,
       thickness: flow.incomingThickness,
+      incoming: incomingOf(flow),
       ...(waferKind === "silicon wafer" ? {} : { kind: waferKind }),
     },
     ...(bow || warp ? { gate: { ...(bow && { bow }), ...(warp && { warp }) } } : {}),
     steps: flow.steps.map(stepInputOf),
   };
+}
+
+function incomingOf({
+  silicon,
+  incomingBowAlong: bowX,
+  incomingBowAcross: bowY,
+  incomingFilmShare: filmShare,
+}: Parameters<typeof flowInputOf>[0]): IncomingShape | null {
+  return bowX && bowY ? incomingFromBows({ radius: silicon.diameter / 2, bowX, bowY, filmShare }) : null;
 }
 
 function stepInputOf(step: StepDetail): StepInput {
