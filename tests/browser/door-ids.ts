@@ -51,6 +51,7 @@ export async function ternIds(engineer: APIRequestContext): Promise<DoorIds> {
         "select s.id from stack s join program p on p.id = s.program_id where p.slug = 'tern'",
       ),
       filmId: await idOf(query, "select id from film where name = 'Polymer dielectric A'"),
+      materialId: await idOf(query, "select id from bonding_material order by name limit 1"),
       recordId: await idOf(query, "select id from carrier order by name limit 1"),
     };
   });

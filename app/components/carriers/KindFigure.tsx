@@ -1,3 +1,4 @@
+import { Link } from "react-router";
 import { softensAt } from "#app/lib/adhesive-bands.ts";
 import type { KindPageData } from "#app/lib/kind-data.ts";
 import { PairTrialSection } from "./PairTrialSection.tsx";
@@ -11,18 +12,25 @@ export function KindFigure(data: KindPageData) {
     case "bonding-materials": {
       const { flows, temperatureLimit, bondTemperature, releaseTemperature } = data.record;
       return (
-        <div className="px-6 pb-6 max-tablet:hidden">
-          <TemperatureBand
-            temperatures={{
-              softening: softensAt(data.record),
-              flows,
-              limit: temperatureLimit.value,
-              margin: data.site.adhesiveMargin,
-            }}
-            bond={bondTemperature.value}
-            release={releaseTemperature.value}
-          />
-        </div>
+        <>
+          <p className="px-4 pb-4 tablet:px-6">
+            <Link to={`/carriers/bonding-materials/${data.record.id}/calibrate`} className="link">
+              Calibrate on measured pairs
+            </Link>
+          </p>
+          <div className="px-6 pb-6 max-tablet:hidden">
+            <TemperatureBand
+              temperatures={{
+                softening: softensAt(data.record),
+                flows,
+                limit: temperatureLimit.value,
+                margin: data.site.adhesiveMargin,
+              }}
+              bond={bondTemperature.value}
+              release={releaseTemperature.value}
+            />
+          </div>
+        </>
       );
     }
     case "silicon":
