@@ -5,6 +5,7 @@ import { RULES } from "./ranges.ts";
 
 const MOST_ROWS = 30;
 
+/** A row of the form: null when it is blank altogether, else all three of it. */
 const row = z
   .object({
     step: z
@@ -14,7 +15,18 @@ const row = z
     bow: optionalQuantity({ ...RULES.bow, label: "measured bow" }),
     uncertainty: optionalQuantity(RULES.bowUncertainty),
   })
-  .optional();
+  .optional()
+  .transform((typed, context) => {
+    const { step, bow = null, uncertainty = null } = typed ?? {};
+    if (!step && bow === null && uncertainty === null) return null;
+    const fail = (field: string, message: string) => context.addIssue({ code: "custom", path: [field], message });
+    if (!step) fail("step", "Choose the step after which it was measured.");
+    if (bow === null) fail("bow", "Type the measured bow. Blank is missing, not zero.");
+    if (uncertainty === null) fail("uncertainty", "Type how well it is known: its standard uncertainty.");
+    return step && bow !== null && uncertainty !== null
+      ? { step: Number(step), bow, standardUncertainty: uncertainty }
+      : z.NEVER;
+  });
 
 /** A measured bow of a pair as its row gives it; `row` is its place in the form, from 0. Standard bow, SI. */
 export interface MeasuredBow {
@@ -36,20 +48,13 @@ export const calibrationSchema = z
       .transform((rows) => rows ?? []),
   })
   .transform(({ rows, ...rest }, context) => {
-    const bows: MeasuredBow[] = [];
-    const fail = (index: number, field: string, message: string) =>
-      context.addIssue({ code: "custom", path: ["rows", index, field], message });
-    for (const [index, typed] of rows.entries()) {
-      const { step, bow, uncertainty } = typed ?? { bow: null, uncertainty: null };
-      if (!step && bow === null && uncertainty === null) continue;
-      if (!step) fail(index, "step", "Choose the step after which it was measured.");
-      if (bow === null) fail(index, "bow", "Type the measured bow. Blank is missing, not zero.");
-      if (uncertainty === null) fail(index, "uncertainty", "Type how well it is known: its standard uncertainty.");
-      if (step && bow !== null && uncertainty !== null)
-        bows.push({ row: index, step: Number(step), bow, standardUncertainty: uncertainty });
-    }
-    if (bows.length === 0 && context.issues.length === 0)
-      fail(0, "bow", "Type at least one measured bow with its step and its standard uncertainty.");
+    const bows = rows.flatMap((typed, index): MeasuredBow[] => (typed ? [{ row: index, ...typed }] : []));
+    if (bows.length === 0)
+      context.addIssue({
+        code: "custom",
+        path: ["rows", 0, "bow"],
+        message: "Type at least one measured bow with its step and its standard uncertainty.",
+      });
     return { ...rest, bows };
   });
 export type CalibrationValues = z.output<typeof calibrationSchema>;

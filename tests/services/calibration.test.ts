@@ -61,7 +61,7 @@ test("fitted values take the place of the stated ones, say where they come from,
   });
   const events = await asOwner<{ field: string }>(
     database,
-    "select field from audit_event where record_id in (?, ?) and field in ('effectiveModulus', 'expansion')",
+    "select field from audit_event where subject_id in (?, ?) and field in ('effectiveModulus', 'expansion')",
     [material, carrier?.id],
   );
   expect(events.map(({ field }) => field).toSorted()).toEqual(["effectiveModulus", "expansion"]);

@@ -29,6 +29,11 @@ describe("the form of a calibration", () => {
     ]);
   });
 
+  it("says everything that is wrong at once", () => {
+    const { errors } = send(calibrationSchema, sent(rowOf(0, "10", "12 parsecs", "4 um"), rowOf(1, "", "-1 um", "")));
+    expect(Object.keys(errors).toSorted()).toEqual(["rows[0].bow", "rows[1].step", "rows[1].uncertainty"]);
+  });
+
   it.each([
     [sent(rowOf(0, "", "", "")), "rows[0].bow", "at least one measured bow"],
     [sent(rowOf(0, "10", "", "4 um")), "rows[0].bow", "Blank is missing, not zero"],
