@@ -48,7 +48,7 @@ function Values({ values }: { values: FittedValue[] }) {
         <thead>
           <tr>
             <th scope="col">Value</th>
-            <th scope="col" className="num">
+            <th scope="col" className="num max-tablet:hidden">
               Stated
             </th>
             <th scope="col" className="num">
@@ -62,7 +62,7 @@ function Values({ values }: { values: FittedValue[] }) {
               <th scope="row" className="font-normal">
                 {label} <span className="block text-label text-quiet">{of}</span>
               </th>
-              <td className="num">{stated}</td>
+              <td className="num max-tablet:hidden">{stated}</td>
               <td className="num font-semibold">{fitted}</td>
             </tr>
           ))}
@@ -71,6 +71,11 @@ function Values({ values }: { values: FittedValue[] }) {
     </div>
   );
 }
+
+const HEADS = ["Measured", "As stated", "Fitted", "Left over", "Uncertainty"] as const;
+
+/** What was computed before the fit is left out on a phone. */
+const figureClass = (head: string | undefined) => (head === "As stated" ? "num max-tablet:hidden" : "num");
 
 function Residuals({ rows }: { rows: ResidualRow[] }) {
   const name = "Measured and computed bows";
@@ -81,8 +86,8 @@ function Residuals({ rows }: { rows: ResidualRow[] }) {
         <thead>
           <tr>
             <th scope="col">After step</th>
-            {["Measured", "As stated", "Fitted", "Left over", "Uncertainty"].map((head) => (
-              <th key={head} scope="col" className="num">
+            {HEADS.map((head) => (
+              <th key={head} scope="col" className={figureClass(head)}>
                 {head} <span className="block font-normal text-quiet">µm</span>
               </th>
             ))}
@@ -95,7 +100,7 @@ function Residuals({ rows }: { rows: ResidualRow[] }) {
                 {step}, {title}
               </th>
               {[measured, stated, fitted, residual, uncertainty].map((figure, column) => (
-                <td key={column} className="num">
+                <td key={column} className={figureClass(HEADS[column])}>
                   {figure}
                 </td>
               ))}
