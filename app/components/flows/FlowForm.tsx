@@ -64,6 +64,9 @@ export function FlowForm({ values, version, program, silicon, bond, origin, last
         given={Boolean(values.incomingBowAlong?.value)}
         lastResult={lastResult}
       >
+        <p className="max-w-[60em] text-quiet">
+          Leave it blank where a step adds an equivalent film of the fab’s back end: its bow would count twice.
+        </p>
         <MeasuredField
           field={fields.incomingBowAlong}
           label="Measured bow along the notch, dome positive with the device side up"
