@@ -89,7 +89,7 @@ export async function readPairFlow(
 }
 
 /** Text of a bow, in µm with its sign. */
-export const bowText = (bow: number) => formatQuantity(bow, "length", { unit: "µm", sign: true, decimals: 0 });
+const bowText = (bow: number) => formatQuantity(bow, "length", { unit: "µm", sign: true, decimals: 0 });
 
 function calibrationFlow(scope: ActorScope, flow: PairFlow): CalibrationFlow {
   const { id, name, bond, states, fault } = flow;
