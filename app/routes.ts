@@ -52,6 +52,7 @@ export default [
     ...prefix("carriers", [
       index("routes/_app/carriers/index.tsx"),
       route("limits", "routes/_app/carriers/limits.tsx"),
+      route("bonding-materials/:materialId/calibrate", "routes/_app/carriers/calibrate.tsx"),
       ...prefix(":kind", [
         index("routes/_app/carriers/list.tsx"),
         route("new", "routes/_app/carriers/new.tsx"),

@@ -1,4 +1,5 @@
 import { againstUpperLimit } from "#app/engine/rules/against-limit.ts";
+import type { Measured } from "#app/engine/measured.ts";
 import type { Outcome } from "#app/engine/vocabulary.ts";
 
 /** What the temperatures of a bonding material mean for a step between bond and debond. Kelvin. */
@@ -8,6 +9,17 @@ export interface AdhesiveTemperatures {
   limit: number;
   /** margin asked below the limit */
   margin: number;
+}
+
+/**
+ * Temperature, K, from which a bonding material is soft for the rule on bonding materials: of a thermoplastic its flow point where
+ * that is known, else the glass transition or the softening point; null when it has none in the range used.
+ */
+export function softensAt(
+  material: Record<"softening" | "glassTransition" | "flowPoint", Measured | null>,
+): number | null {
+  const { softening, glassTransition, flowPoint } = material;
+  return (flowPoint ?? glassTransition ?? softening)?.value ?? null;
 }
 
 /** A stretch of temperature with one outcome of the rule on bonding materials; `to` belongs to the next one but for the limit. */

@@ -27,6 +27,8 @@ export interface SelectedStep {
   peak: ShapeLine | null;
   /** null where nothing holds it: it lies then as it does */
   released: ShapeLine | null;
+  /** what its figures rest on that nobody stated */
+  remarks: string[];
   /** what is not clear, worst first */
   open: FindingView[];
   clear: FindingView[];
@@ -70,6 +72,7 @@ export function selectedStep(assessmentId: string, result: AssessmentResult, num
       : { text: `${sentenceCase(heldFlat(step.planned))}, ${step.faceUp} up.`, working: null },
     peak: step.atPeak && line("peak", step.atPeak, atPeak(step.atPeak)),
     released: step.planned === "bare" ? null : line("released", step.released, `${ifLetGo(step)}.`),
+    remarks: step.remarks ?? [],
     open: findings.filter(({ outcome }) => outcome !== "clear").sort(bySeverity),
     clear: findings.filter(({ outcome }) => outcome === "clear"),
     budget: step.budget.map(({ input, source, contribution }) => ({

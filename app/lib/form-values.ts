@@ -27,3 +27,19 @@ export function measuredText(
 
 /** An answer as the value of its choice; nothing when it was not given. */
 export const yesOrNoText = (answer: boolean | null): string => (answer === null ? "" : answer ? "yes" : "no");
+
+/** The measured shape that a wafer comes in with; see the flow's own fields. */
+export interface IncomingShape {
+  incomingBowAlong: Measured | null;
+  incomingBowAcross: Measured | null;
+  incomingFilmShare: Measured | null;
+}
+
+/** That shape as the text of its form fields. */
+export function incomingShapeTexts(flow: IncomingShape) {
+  return {
+    incomingBowAlong: measuredText(flow.incomingBowAlong, "length", { unit: "µm" }),
+    incomingBowAcross: measuredText(flow.incomingBowAcross, "length", { unit: "µm" }),
+    incomingFilmShare: measuredText(flow.incomingFilmShare, "fraction", { unit: "%" }),
+  };
+}

@@ -47,6 +47,13 @@ const OTHER: Record<string, InputProperty> = {
   release: { label: "Release" },
   atPeak: { label: "When hot" },
   name: { label: "Name" },
+  incoming: { label: "Incoming shape" },
+  x: { label: "Incoming curvature along the notch", dimension: "curvature", unit: "1/m", sign: true },
+  y: { label: "Incoming curvature across the notch", dimension: "curvature", unit: "1/m", sign: true },
+  filmShare: { label: "Film part of the incoming shape", dimension: "fraction", unit: "%" },
+  meanExpansionOver: { label: "Expansion is a mean over" },
+  from: { label: "Expansion is a mean from", dimension: "temperature", unit: "°C" },
+  to: { label: "Expansion is a mean to", dimension: "temperature", unit: "°C" },
 };
 
 const TABLES: Partial<Record<InputRecord, Record<string, InputProperty>>> = {

@@ -51,6 +51,8 @@ export interface StepResult {
   atPeak: ShapeResult | null;
   /** if nothing held it, at 25 °C */
   released: ShapeResult;
+  /** what its figures rest on that nobody stated, a sentence each; absent in results of before they were kept */
+  remarks?: string[];
   filmForce: { front: number; back: number };
   outcome: Outcome;
   /** inputs that move this step's bow most, largest first */

@@ -12,6 +12,9 @@ export interface FlowPlan {
   /** id of the silicon wafer */
   silicon: string;
   incomingThickness: Measured;
+  incomingBowAlong: Measured | null;
+  incomingBowAcross: Measured | null;
+  incomingFilmShare: Measured | null;
   waferKind: WaferKind;
   gateBow: Measured | null;
   gateWarp: Measured | null;

@@ -54,6 +54,9 @@ export interface FlowDetail {
   program: { id: string; name: string; slug: string };
   silicon: { id: string; name: string; diameter: number; orientation: "100" | "111" };
   incomingThickness: Measured;
+  incomingBowAlong: Measured | null;
+  incomingBowAcross: Measured | null;
+  incomingFilmShare: Measured | null;
   waferKind: WaferKind;
   gateBow: Measured | null;
   gateWarp: Measured | null;

@@ -26,6 +26,9 @@ const flowFields = {
   program: z.uuid("Choose a program."),
   silicon: z.uuid("Choose the silicon."),
   incomingThickness: measured({ ...RULES.siliconThickness, source: "supplier" }),
+  incomingBowAlong: optionalMeasured({ ...RULES.bow, label: "bow along the notch", source: "measured here" }),
+  incomingBowAcross: optionalMeasured({ ...RULES.bow, label: "bow across it", source: "measured here" }),
+  incomingFilmShare: optionalMeasured({ ...RULES.share, label: "share that films cause", source: "assumed" }),
   waferKind: z
     .enum(WAFER_KINDS, "Choose what stands in the flow.")
     .optional()
@@ -34,9 +37,23 @@ const flowFields = {
   gateWarp: optionalMeasured({ ...RULES.warp, label: "accepted warp", source: "supplier" }),
 };
 
-function checkIncoming({ incomingThickness }: { incomingThickness: Measured }, context: z.core.$RefinementCtx): void {
-  if (reachesZero(incomingThickness))
-    context.addIssue({ code: "custom", path: ["incomingThickness", "tolerance"], message: SPREAD });
+interface Incoming {
+  incomingThickness: Measured;
+  incomingBowAlong: Measured | null;
+  incomingBowAcross: Measured | null;
+  incomingFilmShare: Measured | null;
+}
+
+function checkIncoming(flow: Incoming, context: z.core.$RefinementCtx): void {
+  const { incomingBowAlong: along, incomingBowAcross: across } = flow;
+  const fail = (path: string[], message: string) => context.addIssue({ code: "custom", path, message });
+  if (reachesZero(flow.incomingThickness)) fail(["incomingThickness", "tolerance"], SPREAD);
+  if (along && !across)
+    fail(["incomingBowAcross", "value"], "Type the bow across as well: the same again where both are alike.");
+  if (across && !along)
+    fail(["incomingBowAlong", "value"], "Type the bow along the notch as well: the same again where both are alike.");
+  if (flow.incomingFilmShare && !along && !across)
+    fail(["incomingBowAlong", "value"], "Type the bow that this is a share of, or clear the share.");
 }
 
 /** The head of a flow. */

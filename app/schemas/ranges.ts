@@ -90,6 +90,11 @@ export const RULES = {
     range: { least: 0, most: 31_536_000, words: "0 to 365 days" },
   },
   bow: { label: "bow", dimension: "length", range: { least: -0.02, most: 0.02, words: "−20 mm to 20 mm" } },
+  bowUncertainty: {
+    label: "standard uncertainty",
+    dimension: "length",
+    range: { least: 1e-8, most: 0.02, words: "10 nm to 20 mm" },
+  },
   warp: { label: "warp", dimension: "length", range: { least: 0, most: 0.02, words: "0 to 20 mm" } },
   faceForce: {
     label: "ground face force",

@@ -35,7 +35,7 @@ export type Saved =
  * Runs a save and puts what the database itself refused into the same words: two people saving at the same moment get the same
  * answer as two who saved a minute apart.
  */
-export async function saving(work: () => Promise<Saved>): Promise<Saved> {
+export async function saving<Other = never>(work: () => Promise<Saved | Other>): Promise<Saved | Other> {
   try {
     return await work();
   } catch (error) {

@@ -56,6 +56,7 @@ const DOORS: Record<string, string> = {
   "/assessments/:assessmentId/window": "302 404 200 200 200 200 404",
   "/carriers": "302 403 302 302 302 302 302",
   "/carriers/limits": "302 403 200 200 200 200 200",
+  "/carriers/bonding-materials/:materialId/calibrate": "302 403 200 200 200 200 200",
   "/carriers/:kind": "302 403 200 200 200 200 200",
   "/carriers/:kind/new": "302 403 403 403 200 403 200",
   "/carriers/:kind/:recordId": "302 403 200 200 200 200 200",

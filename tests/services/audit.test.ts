@@ -32,6 +32,7 @@ async function copperFilm() {
       poissonsRatio,
       expansion,
       yieldStress: film.yieldStress ?? null,
+      zeroStressTemperature: null,
       temperatureLimit: film.temperatureLimit ?? null,
     },
   };

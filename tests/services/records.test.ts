@@ -21,6 +21,7 @@ const newFilm = (name: string) => ({
     poissonsRatio: measured(0.35, null, "supplier"),
     expansion: measured(40e-6, null, "supplier"),
     yieldStress: null,
+    zeroStressTemperature: null,
     temperatureLimit: null,
     handling: BLANK_FILM_HANDLING,
   },

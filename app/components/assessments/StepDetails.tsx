@@ -6,7 +6,7 @@ import { WorkingLink } from "./WorkingLink.tsx";
 
 /** The selected step in full: what is not clear first, then the shapes, then the findings that are clear, folded away. */
 export function StepDetails({ step }: { step: SelectedStep }) {
-  const { open, clear, lies, peak, released } = step;
+  const { open, clear, lies, peak, released, remarks } = step;
   return (
     <div className="space-y-3">
       {open.map((finding) => (
@@ -16,6 +16,18 @@ export function StepDetails({ step }: { step: SelectedStep }) {
         <Shape term="Lies as" line={lies} />
         {peak ? <Shape term="When hot" line={peak} /> : null}
         {released ? <Shape term="If let go" line={released} /> : null}
+        {remarks.length > 0 ? (
+          <>
+            <dt>Rests on</dt>
+            <dd>
+              <ul>
+                {remarks.map((remark) => (
+                  <li key={remark}>{noBreak(remark)}</li>
+                ))}
+              </ul>
+            </dd>
+          </>
+        ) : null}
       </DetailList>
       {clear.length > 0 ? (
         <details>

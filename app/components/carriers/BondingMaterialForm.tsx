@@ -93,10 +93,12 @@ export function BondingMaterialForm({ record, ...rest }: RecordFormProps<Bonding
       <LineField field={fields.name} label="Name" />
       <FormPart title="In heat">
         <PropertyField field={fields.softening} of={P.softening} />
+        <PropertyField field={fields.glassTransition} of={P.glassTransition} />
         <CheckField
           field={fields.flows}
           label="Thermoplastic: it flows above that point. Not ticked: cross-linked, it stays coupled."
         />
+        <PropertyField field={fields.flowPoint} of={P.flowPoint} />
         <PropertyField field={fields.temperatureLimit} of={P.temperatureLimit} />
         <PropertyField field={fields.bondTemperature} of={P.bondTemperature} />
         <LineField

@@ -22,6 +22,8 @@ type CarrierFormValues = {
   material: string;
   diameter: string;
   expansionRange: string;
+  meanExpansionFrom: string;
+  meanExpansionTo: string;
   passesUltraviolet: boolean;
   passesInfrared: boolean;
   perforated: boolean;
@@ -35,6 +37,8 @@ const formValues = (carrier: Carrier) => ({
   ...measuredTexts(carrier, P),
   diameter: quantityText(carrier.diameter, "length", "mm"),
   expansionRange: carrier.expansion === null ? "" : carrier.expansionRange,
+  meanExpansionFrom: quantityText(carrier.meanExpansionFrom, "temperature", "°C"),
+  meanExpansionTo: quantityText(carrier.meanExpansionTo, "temperature", "°C"),
   reuseLimit: String(carrier.reuseLimit),
   handling: {
     metalInLight: yesOrNoText(carrier.handling.metalInLight),
@@ -61,11 +65,29 @@ export function CarrierForm({ record, ...rest }: RecordFormProps<Carrier>) {
       <PropertyField field={fields.youngsModulus} of={P.youngsModulus} />
       <PropertyField field={fields.poissonsRatio} of={P.poissonsRatio} />
       <PropertyField field={fields.expansion} of={P.expansion} />
-      <LineField
-        field={fields.expansionRange}
-        label="Temperatures over which that expansion is a mean"
-        hint="25 to 150 °C; blank for silicon. A mean over another range is another number."
-      />
+      <FormGroup label="Temperatures over which that expansion is a mean">
+        <div className="grid gap-3 tablet:grid-cols-[1fr_1fr_2fr]">
+          <QuantityField
+            field={fields.meanExpansionFrom}
+            label="From"
+            dimension="temperature"
+            example="25 °C"
+            hint="Blank for silicon"
+          />
+          <QuantityField
+            field={fields.meanExpansionTo}
+            label="To"
+            dimension="temperature"
+            example="150 °C"
+            hint="A step beyond the range says so"
+          />
+          <LineField
+            field={fields.expansionRange}
+            label="In words"
+            hint="Where it is not two temperatures: a mean over another range is another number"
+          />
+        </div>
+      </FormGroup>
       <PropertyField field={fields.density} of={P.density} />
       <PropertyField field={fields.thicknessVariation} of={P.thicknessVariation} />
       <PropertyField field={fields.temperatureLimit} of={P.temperatureLimit} />

@@ -1,3 +1,5 @@
+import { Link } from "react-router";
+import { softensAt } from "#app/lib/adhesive-bands.ts";
 import type { KindPageData } from "#app/lib/kind-data.ts";
 import { PairTrialSection } from "./PairTrialSection.tsx";
 import { TemperatureBand } from "./TemperatureBand.tsx";
@@ -8,20 +10,27 @@ export function KindFigure(data: KindPageData) {
     case "carriers":
       return data.trial && <PairTrialSection trial={data.trial} />;
     case "bonding-materials": {
-      const { softening, flows, temperatureLimit, bondTemperature, releaseTemperature } = data.record;
+      const { flows, temperatureLimit, bondTemperature, releaseTemperature } = data.record;
       return (
-        <div className="px-6 pb-6 max-tablet:hidden">
-          <TemperatureBand
-            temperatures={{
-              softening: softening?.value ?? null,
-              flows,
-              limit: temperatureLimit.value,
-              margin: data.site.adhesiveMargin,
-            }}
-            bond={bondTemperature.value}
-            release={releaseTemperature.value}
-          />
-        </div>
+        <>
+          <p className="px-4 pb-4 tablet:px-6">
+            <Link to={`/carriers/bonding-materials/${data.record.id}/calibrate`} className="link">
+              Calibrate on measured pairs
+            </Link>
+          </p>
+          <div className="px-6 pb-6 max-tablet:hidden">
+            <TemperatureBand
+              temperatures={{
+                softening: softensAt(data.record),
+                flows,
+                limit: temperatureLimit.value,
+                margin: data.site.adhesiveMargin,
+              }}
+              bond={bondTemperature.value}
+              release={releaseTemperature.value}
+            />
+          </div>
+        </>
       );
     }
     case "silicon":

@@ -4,12 +4,30 @@ import type { PropertyDescription } from "#app/components/library/property.ts";
 export const BONDING_MATERIAL_PROPERTIES = {
   softening: {
     label: "Softening point",
-    ask: "Softening point or glass transition",
+    ask: "Softening point, as its data sheet gives it",
     dimension: "temperature",
     unit: "°C",
     example: "120 °C",
     hint: "Blank: none in the range used",
     missing: "none in the range used",
+  },
+  glassTransition: {
+    label: "Glass transition",
+    ask: "Glass transition, where it turns to a rubber",
+    dimension: "temperature",
+    unit: "°C",
+    example: "105 °C",
+    hint: "Blank: its softening point",
+    missing: "taken as the softening point",
+  },
+  flowPoint: {
+    label: "Flow point",
+    ask: "Flow point of a thermoplastic, from where on the plates slide",
+    dimension: "temperature",
+    unit: "°C",
+    example: "150 °C",
+    hint: "Blank: not known, taken not to slide",
+    missing: "not given: taken not to slide",
   },
   temperatureLimit: {
     label: "Temperature limit",

@@ -7,6 +7,7 @@ import type { Fact } from "#app/components/library/Facts.tsx";
 import { givenRows, notGiven, propertyRows } from "#app/components/library/property.ts";
 import { RELEASE_METHODS } from "#app/engine/flow/model.ts";
 import { formatQuantity } from "#app/engine/units/format.ts";
+import { softensAt } from "#app/lib/adhesive-bands.ts";
 import { formatBare, formatMeasured } from "#app/lib/format-measured.ts";
 import { KINDS, kindPath } from "#app/lib/library-kinds.ts";
 import type { LibraryRecords } from "#app/schemas/library-records.ts";
@@ -17,15 +18,18 @@ import type { SiteFacts } from "#app/lib/kind-data.ts";
 
 type BondingMaterial = LibraryRecords["bondingMaterial"];
 
+const { flowPoint: _thermoplasticsAlone, ...CROSS_LINKED_PROPERTIES } = BONDING_MATERIAL_PROPERTIES;
+
 const celsius = (kelvin: number) => formatQuantity(kelvin, "temperature", { unit: "°C" });
 const classOf = ({ flows }: BondingMaterial) => (flows ? "flows" : "cross-linked");
 const range = ({ leastThickness, mostThickness }: BondingMaterial) =>
   `${formatBare(leastThickness, "length", "µm")} to ${formatQuantity(mostThickness, "length", { unit: "µm" })}`;
 
 /** Temperature up to which a step on this material is clear, K. */
-function clearBelow({ softening, flows, temperatureLimit }: BondingMaterial, { adhesiveMargin }: SiteFacts): number {
-  const withMargin = temperatureLimit.value - adhesiveMargin;
-  return flows && softening ? Math.min(softening.value, withMargin) : withMargin;
+function clearBelow(material: BondingMaterial, { adhesiveMargin }: SiteFacts): number {
+  const withMargin = material.temperatureLimit.value - adhesiveMargin;
+  const soft = softensAt(material);
+  return material.flows && soft !== null ? Math.min(soft, withMargin) : withMargin;
 }
 
 export const bondingMaterialList = (site: SiteFacts): ListView<BondingMaterial> => ({
@@ -118,10 +122,11 @@ export const bondingMaterialList = (site: SiteFacts): ListView<BondingMaterial> 
   ],
 });
 
-function meaning({ softening, flows }: BondingMaterial): string {
-  if (!softening) return "Stays coupled: it is cross-linked and has no softening point in the range used.";
-  const at = celsius(softening.value);
-  return flows
+function meaning(material: BondingMaterial): string {
+  const soft = softensAt(material);
+  if (soft === null) return "Stays coupled: it is cross-linked and has no softening point in the range used.";
+  const at = celsius(soft);
+  return material.flows
     ? `Flows above ${at}; never in vacuum above it.`
     : `Stays coupled above ${at}: it is cross-linked and does not flow.`;
 }
@@ -165,7 +170,9 @@ export function bondingMaterialView(material: BondingMaterial, site: SiteFacts):
     answer: meaning(material),
     because: `A step on it is clear below ${celsius(clearBelow(material, site))} and does not run beyond ${celsius(temperatureLimit.value)}. The locked-in modulus, ${modulus}, couples the pair${instead}.`,
     properties: [
-      ...propertyRows(material, BONDING_MATERIAL_PROPERTIES),
+      ...(material.flows
+        ? propertyRows(material, BONDING_MATERIAL_PROPERTIES)
+        : propertyRows(material, CROSS_LINKED_PROPERTIES)),
       ...givenRows(material.handling, { ...BOND_HEAT_PROPERTIES, ...PEEL_PROPERTIES }),
     ],
     facts: [

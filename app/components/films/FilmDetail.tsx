@@ -15,6 +15,11 @@ interface Props {
   mayAsk: boolean;
 }
 
+const { zeroStressTemperature: _polymersAlone, ...OF_EVERY_FILM } = FILM_PROPERTIES;
+
+const ownRows = (film: Props["record"]) =>
+  film.kind === "polymer" ? propertyRows(film, FILM_PROPERTIES) : propertyRows(film, OF_EVERY_FILM);
+
 /** A film: every property with its source, and where it is used. */
 export function FilmDetail(props: Props) {
   const { record, mayAsk } = props;
@@ -25,7 +30,7 @@ export function FilmDetail(props: Props) {
       view={{
         answer: filmAnswer(record),
         because: filmHistory(record),
-        properties: [...propertyRows(record, FILM_PROPERTIES), ...givenRows(record.handling, FILM_HANDLING_PROPERTIES)],
+        properties: [...ownRows(record), ...givenRows(record.handling, FILM_HANDLING_PROPERTIES)],
         facts: [
           { label: "Kind", value: record.kind },
           { label: "State of the stress", value: record.stressState || "not given" },

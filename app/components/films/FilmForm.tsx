@@ -61,6 +61,7 @@ export function FilmForm({ record, ...rest }: RecordFormProps<Film>) {
       <PropertyField field={fields.poissonsRatio} of={P.poissonsRatio} />
       <PropertyField field={fields.expansion} of={P.expansion} />
       <PropertyField field={fields.yieldStress} of={P.yieldStress} />
+      <PropertyField field={fields.zeroStressTemperature} of={P.zeroStressTemperature} />
       <PropertyField field={fields.temperatureLimit} of={P.temperatureLimit} />
       <OptionalFields
         label="What its stress was measured on, and its solder"

@@ -22,6 +22,15 @@ export const FILM_PROPERTIES = {
     hint: "Blank: it stays elastic",
     missing: "none: it stays elastic",
   },
+  zeroStressTemperature: {
+    label: "Zero-stress temperature",
+    ask: "Zero-stress temperature of a polymer, from where on it carries none",
+    dimension: "temperature",
+    unit: "°C",
+    example: "230 °C",
+    hint: "Blank: its expansion decides",
+    missing: "not given: its expansion decides",
+  },
   temperatureLimit: {
     label: "Temperature limit",
     ask: "Highest temperature it may see",

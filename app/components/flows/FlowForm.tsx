@@ -1,4 +1,5 @@
 import { getFormProps, type SubmissionResult } from "@conform-to/react";
+import type { ReactNode } from "react";
 import { Form, Link } from "react-router";
 import { ChoiceField, sameWords, type Choice } from "#app/components/forms/ChoiceField.tsx";
 import { FormHead } from "#app/components/forms/FormHead.tsx";
@@ -57,29 +58,62 @@ export function FlowForm({ values, version, program, silicon, bond, origin, last
         example="725 um"
         hint="Before the first step"
       />
-      <details className="border-t border-line pt-3" open={Boolean(values.gateBow?.value || values.gateWarp?.value)}>
-        <summary className="cursor-pointer font-semibold">What may come in</summary>
-        <div className="mt-3 space-y-3">
-          <ChoiceField
-            field={fields.waferKind}
-            label="What stands in the flow"
-            choices={sameWords(WAFER_KINDS)}
-            hint="Only silicon wafers are judged; everything else is refused by name"
-          />
-          <MeasuredField
-            field={fields.gateBow}
-            label="Bow that is accepted, dome positive, with its band as tolerance"
-            dimension="length"
-            example="-90 um"
-          />
-          <MeasuredField
-            field={fields.gateWarp}
-            label="Largest warp that is accepted"
-            dimension="length"
-            example="200 um"
-          />
-        </div>
-      </details>
+      <Folded
+        label="Shape that it comes in with"
+        holds={["incomingBowAlong", "incomingBowAcross", "incomingFilmShare"]}
+        given={Boolean(values.incomingBowAlong?.value)}
+        lastResult={lastResult}
+      >
+        <p className="max-w-[60em] text-quiet">
+          Leave it blank where a step adds an equivalent film of the fab’s back end: its bow would count twice.
+        </p>
+        <MeasuredField
+          field={fields.incomingBowAlong}
+          label="Measured bow along the notch, dome positive with the device side up"
+          dimension="length"
+          example="-90 um"
+          hint="Free, gravity compensated"
+        />
+        <MeasuredField
+          field={fields.incomingBowAcross}
+          label="Measured bow across it"
+          dimension="length"
+          example="-80 um"
+          hint="The same again where both are alike"
+        />
+        <MeasuredField
+          field={fields.incomingFilmShare}
+          label="Share of it that films cause, which grows when the wafer is thinned"
+          dimension="fraction"
+          example="80 %"
+          hint="Blank: not known, taken as all of it"
+        />
+      </Folded>
+      <Folded
+        label="What may come in"
+        holds={["waferKind", "gateBow", "gateWarp"]}
+        given={Boolean(values.gateBow?.value || values.gateWarp?.value)}
+        lastResult={lastResult}
+      >
+        <ChoiceField
+          field={fields.waferKind}
+          label="What stands in the flow"
+          choices={sameWords(WAFER_KINDS)}
+          hint="Only silicon wafers are judged; everything else is refused by name"
+        />
+        <MeasuredField
+          field={fields.gateBow}
+          label="Bow that is accepted, dome positive, with its band as tolerance"
+          dimension="length"
+          example="-90 um"
+        />
+        <MeasuredField
+          field={fields.gateWarp}
+          label="Largest warp that is accepted"
+          dimension="length"
+          example="200 um"
+        />
+      </Folded>
       {bond && (
         <fieldset className="border-t border-line pt-3">
           <legend className="float-left mb-2 w-full font-semibold">Carrier and bond</legend>
@@ -107,6 +141,20 @@ export function FlowForm({ values, version, program, silicon, bond, origin, last
         </Link>
       </div>
     </Form>
+  );
+}
+
+/** Fields that few flows have, folded away until something of them is given or needs a look. */
+function Folded(
+  props: Pick<Props, "lastResult"> & { label: string; holds: string[]; given: boolean; children: ReactNode },
+) {
+  const faults = Object.keys(props.lastResult?.error ?? {});
+  const faulty = faults.some((fault) => props.holds.includes(fault.split(".")[0] ?? ""));
+  return (
+    <details className="border-t border-line pt-3" open={props.given || faulty}>
+      <summary className="cursor-pointer font-semibold">{props.label}</summary>
+      <div className="mt-3 space-y-3">{props.children}</div>
+    </details>
   );
 }
 

@@ -1,5 +1,5 @@
 import type { Measured } from "#app/engine/measured.ts";
-import { measuredText } from "#app/lib/form-values.ts";
+import { incomingShapeTexts, measuredText, type IncomingShape } from "#app/lib/form-values.ts";
 import type { MeasuredText } from "../forms/MeasuredField.tsx";
 
 /** The head of a flow as the text of its form. */
@@ -9,6 +9,9 @@ export type FlowFormValues = {
   note: string;
   silicon: string;
   incomingThickness: MeasuredText;
+  incomingBowAlong: MeasuredText;
+  incomingBowAcross: MeasuredText;
+  incomingFilmShare: MeasuredText;
   waferKind: string;
   gateBow: MeasuredText;
   gateWarp: MeasuredText;
@@ -16,7 +19,7 @@ export type FlowFormValues = {
   bondingMaterial: string;
 };
 
-interface FlowHead {
+interface FlowHead extends IncomingShape {
   program: { id: string };
   name: string;
   note: string;
@@ -34,6 +37,7 @@ export function flowFormValues(flow: FlowHead): Partial<FlowFormValues> {
     note: flow.note,
     silicon: flow.silicon.id,
     incomingThickness: measuredText(flow.incomingThickness, "length", { unit: "µm" }),
+    ...incomingShapeTexts(flow),
     waferKind: flow.waferKind,
     gateBow: measuredText(flow.gateBow, "length", { unit: "µm" }),
     gateWarp: measuredText(flow.gateWarp, "length", { unit: "µm" }),

@@ -20,8 +20,12 @@ export const BondingMaterial = defineEntity({
     expansionAbove: p.json<Measured>(),
     /** glass transition or softening point, K; null when there is none in the range used */
     softening: p.json<Measured>().nullable(),
+    /** K; where it turns to a rubber, when that is known apart from its softening point */
+    glassTransition: p.json<Measured>().nullable(),
     /** true for a thermoplastic, which flows above its softening point */
     flows: p.boolean(),
+    /** K; of a thermoplastic: from here on the plates slide. null when nobody knows: they are taken not to */
+    flowPoint: p.json<Measured>().nullable(),
     bondTemperature: p.json<Measured>(),
     temperatureLimit: p.json<Measured>(),
     /** m */

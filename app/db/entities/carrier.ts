@@ -21,6 +21,9 @@ export const Carrier = defineEntity({
     /** mean over `expansionRange`; null means silicon's own curve */
     expansion: p.json<Measured>().nullable(),
     expansionRange: p.text(),
+    /** temperatures between which `expansion` is that mean, K; null when nobody said */
+    meanExpansionFrom: p.double().$type<number>().nullable(),
+    meanExpansionTo: p.double().$type<number>().nullable(),
     density: p.json<Measured>(),
     thicknessVariation: p.json<Measured>(),
     temperatureLimit: p.json<Measured>(),

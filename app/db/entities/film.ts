@@ -22,6 +22,8 @@ export const Film = defineEntity({
     expansion: p.json<Measured>(),
     /** at 25 °C, Pa; only for metals that yield */
     yieldStress: p.json<Measured>().nullable(),
+    /** of a polymer: from here on it carries no stress, K; null leaves that to its expansion */
+    zeroStressTemperature: p.json<Measured>().nullable(),
     temperatureLimit: p.json<Measured>().nullable(),
     /** what only the handling rules ask */
     handling: p.json<FilmHandlingValues>(),

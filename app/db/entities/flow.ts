@@ -18,6 +18,11 @@ export const Flow = defineEntity({
     silicon: () => p.manyToOne(Silicon),
     /** silicon as it comes in, m */
     incomingThickness: p.json<Measured>(),
+    /** standard bow that it was measured to come in with, along the notch and across it, m; both or neither */
+    incomingBowAlong: p.json<Measured>().nullable(),
+    incomingBowAcross: p.json<Measured>().nullable(),
+    /** share of that bow which films cause, 0 to 1; null when nobody knows */
+    incomingFilmShare: p.json<Measured>().nullable(),
     waferKind: p.text().$type<WaferKind>(),
     /** bow and warp that an incoming wafer may have, m: the band is value ± tolerance, the warp the largest */
     gateBow: p.json<Measured>().nullable(),

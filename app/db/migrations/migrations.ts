@@ -5,6 +5,7 @@ import { FlowHandling } from "./2026-12-03-flow-handling.ts";
 import { FlowRevisionsAndTemplates } from "./2026-12-03-flow-revisions-and-templates.ts";
 import { LibraryForRules } from "./2026-12-04-library-for-rules.ts";
 import { AssessmentLot } from "./2026-12-05-assessment-lot.ts";
+import { PhysicsInputs } from "./2026-12-05-physics-inputs.ts";
 
 /** Every migration in the order in which it runs. */
 export const migrations = [
@@ -15,4 +16,5 @@ export const migrations = [
   { name: "2026-12-03-flow-handling", class: FlowHandling },
   { name: "2026-12-04-library-for-rules", class: LibraryForRules },
   { name: "2026-12-05-assessment-lot", class: AssessmentLot },
+  { name: "2026-12-05-physics-inputs", class: PhysicsInputs },
 ];

@@ -20,6 +20,9 @@ interface ReferenceCarrier {
   poissonsRatio: Measured;
   expansion: Measured | null;
   expansionRange: string;
+  /** K */
+  meanExpansionFrom: number | null;
+  meanExpansionTo: number | null;
   density: Measured;
   thicknessVariation: Measured;
   passesUltraviolet: boolean;
@@ -33,7 +36,8 @@ const glass = (
   poissonsRatio: number,
   expansion: Measured,
   density: Measured,
-  expansionRange: string,
+  /** °C, over which its expansion is a mean */
+  [from, to]: [number, number],
 ): ReferenceCarrier => ({
   name: `${name}, ${diameter * 1000} mm`,
   material: "glass",
@@ -42,7 +46,9 @@ const glass = (
   youngsModulus,
   poissonsRatio: measured(poissonsRatio, 0.01, youngsModulus.source, youngsModulus.note),
   expansion,
-  expansionRange,
+  expansionRange: `${from} to ${to} °C mean`,
+  meanExpansionFrom: celsius(from),
+  meanExpansionTo: celsius(to),
   density,
   thicknessVariation: assumed(2 * um, 1 * um),
   passesUltraviolet: true,
@@ -60,6 +66,8 @@ const silicon = (diameter: number, thickness: number): ReferenceCarrier => ({
   poissonsRatio: measured(0.2785, 0.002, "handbook", "from the elastic constants of silicon, method page"),
   expansion: null,
   expansionRange: "silicon's own curve",
+  meanExpansionFrom: null,
+  meanExpansionTo: null,
   density: measured(2329, 1, "handbook", "from memory of the named publication"),
   thicknessVariation: assumed(1 * um, 0.5 * um),
   passesUltraviolet: false,
@@ -74,7 +82,7 @@ const borosilicate = (diameter: number) =>
     0.2,
     measured(3.25 * ppm, 0.05 * ppm, "handbook", SHEET),
     measured(2230, 10, "handbook", SHEET),
-    "0 to 300 °C mean",
+    [0, 300],
   );
 
 const matched = (diameter: number) =>
@@ -85,7 +93,7 @@ const matched = (diameter: number) =>
     0.19,
     practice(3.3, 3.6, ppm),
     assumed(2500, 40),
-    "30 to 300 °C mean",
+    [30, 300],
   );
 
 /** Carriers that a new site may start from. */

@@ -44,7 +44,8 @@ export class ReferenceSeeder extends Seeder {
 
     const films = new Set((await em.findAll(Film)).map(({ name }) => name));
     for (const film of REFERENCE_FILMS)
-      if (!films.has(film.name)) em.create(Film, { ...delivered(), handling: BLANK_FILM_HANDLING, ...film });
+      if (!films.has(film.name))
+        em.create(Film, { ...delivered(), handling: BLANK_FILM_HANDLING, zeroStressTemperature: null, ...film });
 
     const silicon = new Set((await em.findAll(Silicon)).map(({ name }) => name));
     for (const wafer of REFERENCE_SILICON)
@@ -78,6 +79,8 @@ export class ReferenceSeeder extends Seeder {
           solvent: "not known",
           acid: "not known",
           base: "not known",
+          glassTransition: null,
+          flowPoint: null,
           handling: BLANK_MATERIAL_HANDLING,
           ...material,
         });

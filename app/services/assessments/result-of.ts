@@ -59,6 +59,7 @@ function stepResult({ state, required, outcome, uncertainty, budget }: AssessedS
       ...shapeResult(state.released, null, "device side"),
       working: held ? warpWorking(state.released) : null,
     },
+    remarks: state.remarks,
     filmForce: state.filmForce,
     outcome,
     budget: budget.slice(0, shownContributions),

@@ -8,8 +8,10 @@ import type {
   EquipmentInput,
   FilmInput,
   FlowInput,
+  IncomingShape,
   StepInput,
 } from "#app/engine/flow/model.ts";
+import { incomingFromBows } from "#app/engine/flow/silicon.ts";
 import { bondHandlingOf, stepHandlingOf } from "#app/lib/flow-handling.ts";
 import {
   bondingMaterialHandlingOf,
@@ -19,7 +21,10 @@ import {
 } from "#app/lib/library-handling.ts";
 import type { FlowDetail, StepDetail } from "#app/schemas/flow-view.ts";
 
-/** Flows and library entities as the engine takes them: plain, with the columns that it knows. */
+/**
+ * Flows and library entities as the engine takes them: plain, with the columns that it knows. A column that is blank is null, not
+ * left out, so that a stored assessment can tell when somebody fills it in.
+ */
 
 export function filmInput({ id, name, kind, ...film }: Film): FilmInput {
   return {
@@ -30,12 +35,14 @@ export function filmInput({ id, name, kind, ...film }: Film): FilmInput {
     poissonsRatio: film.poissonsRatio,
     expansion: film.expansion,
     yieldStress: film.yieldStress ?? null,
+    zeroStressTemperature: film.zeroStressTemperature ?? null,
     temperatureLimit: film.temperatureLimit ?? null,
     ...filmHandlingOf(film.handling),
   };
 }
 
 export function carrierInput({ id, name, material, ...carrier }: Carrier): CarrierInput {
+  const { meanExpansionFrom: from, meanExpansionTo: to } = carrier;
   return {
     id,
     name,
@@ -45,6 +52,7 @@ export function carrierInput({ id, name, material, ...carrier }: Carrier): Carri
     youngsModulus: carrier.youngsModulus,
     poissonsRatio: carrier.poissonsRatio,
     expansion: carrier.expansion ?? null,
+    meanExpansionOver: typeof from === "number" && typeof to === "number" ? { from, to } : null,
     temperatureLimit: carrier.temperatureLimit,
     ...carrierHandlingOf(carrier),
   };
@@ -59,6 +67,8 @@ export function bondingMaterialInput({ id, name, ...material }: BondingMaterial)
     expansionBelow: material.expansionBelow,
     expansionAbove: material.expansionAbove,
     softening: material.softening ?? null,
+    glassTransition: material.glassTransition ?? null,
+    flowPoint: material.flowPoint ?? null,
     flows: material.flows,
     bondTemperature: material.bondTemperature,
     temperatureLimit: material.temperatureLimit,
@@ -83,7 +93,7 @@ export function equipmentInput({ id, name, ...tool }: Equipment): EquipmentInput
 
 /** The flow as the engine takes it, complete in itself. */
 export function flowInputOf(
-  flow: Pick<FlowDetail, "name" | "silicon" | "incomingThickness" | "waferKind" | "gateBow" | "gateWarp" | "steps">,
+  flow: Pick<FlowDetail, Exclude<keyof FlowDetail, "id" | "note" | "program" | "stamp" | "mayEdit" | "mayAssess">>,
 ): FlowInput {
   const { name, diameter, orientation } = flow.silicon;
   const { waferKind, gateBow: bow, gateWarp: warp } = flow;
@@ -94,11 +104,21 @@ export function flowInputOf(
       diameter,
       orientation,
       thickness: flow.incomingThickness,
+      incoming: incomingOf(flow),
       ...(waferKind === "silicon wafer" ? {} : { kind: waferKind }),
     },
     ...(bow || warp ? { gate: { ...(bow && { bow }), ...(warp && { warp }) } } : {}),
     steps: flow.steps.map(stepInputOf),
   };
+}
+
+function incomingOf({
+  silicon,
+  incomingBowAlong: bowX,
+  incomingBowAcross: bowY,
+  incomingFilmShare: filmShare,
+}: Parameters<typeof flowInputOf>[0]): IncomingShape | null {
+  return bowX && bowY ? incomingFromBows({ radius: silicon.diameter / 2, bowX, bowY, filmShare }) : null;
 }
 
 function stepInputOf(step: StepDetail): StepInput {

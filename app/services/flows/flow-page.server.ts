@@ -21,6 +21,8 @@ export interface FlowPage {
   program: string;
   silicon: { name: string; diameter: number };
   incoming: Measured;
+  /** measured standard bow along and across the notch, m */
+  incomingBow: { along: Measured; across: Measured } | null;
   /** thinnest silicon of the flow, and its hottest step; SI, null without steps */
   thinnest: Measured | null;
   hottest: number | null;
@@ -51,7 +53,7 @@ export async function flowPage(scope: ActorScope, flowId: string | undefined): P
       history: found.mayEdit ? await flowHistory(em, id) : null,
     };
   });
-  const { silicon, incomingThickness, steps } = flow;
+  const { silicon, incomingThickness, incomingBowAlong: along, incomingBowAcross: across, steps } = flow;
   const thicknesses = [incomingThickness, ...steps.flatMap(({ siliconAfter }) => siliconAfter ?? [])];
   return {
     id: flow.id,
@@ -60,6 +62,7 @@ export async function flowPage(scope: ActorScope, flowId: string | undefined): P
     program: flow.program.name,
     silicon: { name: silicon.name, diameter: silicon.diameter },
     incoming: incomingThickness,
+    incomingBow: along && across ? { along, across } : null,
     thinnest:
       steps.length === 0 ? null : thicknesses.reduce((least, next) => (next.value < least.value ? next : least)),
     hottest: steps.length === 0 ? null : Math.max(...steps.map(({ peakTemperature }) => peakTemperature)),

@@ -4,7 +4,7 @@ import { completeStep } from "#app/lib/blank-step.ts";
 import { proposeSteps } from "#app/lib/flow-from-stack.ts";
 import { proposedRows } from "#app/lib/flow-proposed-rows.ts";
 import { stepRows, type StepRow } from "#app/lib/flow-rows.ts";
-import { measuredText } from "#app/lib/form-values.ts";
+import { incomingShapeTexts, measuredText } from "#app/lib/form-values.ts";
 import type { Measured } from "#app/engine/measured.ts";
 import type { NewFlowValues, StepValues } from "#app/schemas/flow.ts";
 import { inScope, type ActorScope } from "#app/server/scope.server.ts";
@@ -137,6 +137,7 @@ async function fromFlow(scope: ActorScope, flowId: string) {
       silicon: plan.silicon,
       waferKind: plan.waferKind,
       incomingThickness: um(plan.incomingThickness),
+      ...incomingShapeTexts(plan),
       ...(plan.gateBow && { gateBow: um(plan.gateBow) }),
       ...(plan.gateWarp && { gateWarp: um(plan.gateWarp) }),
     },

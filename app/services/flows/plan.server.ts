@@ -47,17 +47,27 @@ export async function readPlans(em: EntityManager, flows: Flow[]): Promise<Store
   return flows.map((flow) => storedPlan(flow, stepsOf.get(flow.id) ?? [], films));
 }
 
+/** The shape that a flow's wafer comes in with. */
+export function incomingShape({ incomingBowAlong, incomingBowAcross, incomingFilmShare }: Flow) {
+  return {
+    incomingBowAlong: incomingBowAlong ?? null,
+    incomingBowAcross: incomingBowAcross ?? null,
+    incomingFilmShare: incomingFilmShare ?? null,
+  };
+}
+
 function storedPlan(flow: Flow, steps: FlowStep[], films: Map<string, FlowStepFilm[]>): StoredPlan {
-  const { name, note, silicon, incomingThickness, waferKind, gateBow, gateWarp } = flow;
+  const { name, note, silicon, incomingThickness, waferKind } = flow;
   return {
     plan: {
       name,
       note,
       silicon: silicon.id,
       incomingThickness,
+      ...incomingShape(flow),
       waferKind,
-      gateBow: gateBow ?? null,
-      gateWarp: gateWarp ?? null,
+      gateBow: flow.gateBow ?? null,
+      gateWarp: flow.gateWarp ?? null,
       steps: steps.map((step) => stepPlan(step, films.get(step.id) ?? [])),
     },
     steps: new Map(steps.map((step) => [step.id, step])),

@@ -6,7 +6,7 @@ import { notFound } from "#app/server/problem.server.ts";
 import type { ActorScope } from "#app/server/scope.server.ts";
 import { requireInProgram } from "../permission.server.ts";
 import { stampOf } from "../record.server.ts";
-import { readPlans } from "./plan.server.ts";
+import { incomingShape, readPlans } from "./plan.server.ts";
 import { stepDetails } from "./step-details.server.ts";
 
 type FlowContent = Omit<FlowDetail, "mayEdit" | "mayAssess">;
@@ -66,6 +66,7 @@ function flowContent(flow: Flow, steps: StepDetail[]): FlowContent {
       orientation: silicon.orientation,
     },
     incomingThickness: flow.incomingThickness,
+    ...incomingShape(flow),
     waferKind: flow.waferKind,
     gateBow: flow.gateBow ?? null,
     gateWarp: flow.gateWarp ?? null,

@@ -36,6 +36,8 @@ const CARRIER: LibraryRecords["carrier"] = {
   poissonsRatio: stated(0.22),
   expansion: { ...stated(3e-6), tolerance: 0.1e-6 },
   expansionRange: "25 to 150 °C mean",
+  meanExpansionFrom: null,
+  meanExpansionTo: null,
   density: stated(2450),
   thicknessVariation: stated(1.5e-6),
   temperatureLimit: stated(673.15),

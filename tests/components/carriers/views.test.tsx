@@ -25,6 +25,8 @@ const SLIDE: LibraryRecords["bondingMaterial"] = {
   note: "",
   flows: true,
   softening: stated(celsius(120)),
+  glassTransition: null,
+  flowPoint: null,
   bondTemperature: stated(celsius(180)),
   temperatureLimit: stated(celsius(200)),
   effectiveModulus: { ...stated(0.15e9), tolerance: 0.045e9, source: "assumed" },

@@ -18,6 +18,7 @@ const COPPER: LibraryRecords["film"] = {
   poissonsRatio: stated(0.34),
   expansion: stated(16.7e-6),
   yieldStress: stated(200e6),
+  zeroStressTemperature: null,
   temperatureLimit: null,
   handling: BLANK_FILM_HANDLING,
 };

@@ -46,6 +46,16 @@ describe("a step in full", () => {
     expect(plain(selected("Petrel", 12).lies.text)).toMatch(/back side up\. Standard bow [^−]*, device side up\.$/);
   });
 
+  it("says what its figures rest on that nobody stated, and nothing in results of before that was kept", () => {
+    const result = demoResult("Petrel");
+    const said = (remarks: string[] | undefined) => {
+      const steps = result.steps.map(({ remarks: _kept, ...step }) => (remarks ? { ...step, remarks } : step));
+      return selectedStep(HEAD.id, { ...result, steps }, 1)?.remarks;
+    };
+    expect(said(["All of it is taken as film."])).toEqual(["All of it is taken as film."]);
+    expect(said(undefined)).toEqual([]);
+  });
+
   it("says what a wafer on tape or carrier would do if let go", () => {
     const tape = selected("Tern", 15);
     expect(tape.lies).toEqual({ text: "Held flat by grinding tape, back side up.", working: null });

@@ -76,6 +76,36 @@ describe("a carrier's form", () => {
     expect(errors["passesUltraviolet"]?.[0]).toContain("does not pass ultraviolet");
   });
 
+  it("takes the range of a mean as two temperatures, and says it in words", () => {
+    const range = { meanExpansionFrom: "30 °C", meanExpansionTo: "300 °C" };
+    const given = { meanExpansionFrom: expect.closeTo(303.15, 6), meanExpansionTo: expect.closeTo(573.15, 6) };
+    for (const words of ["", "25 to 150 °C mean"])
+      expect(send(carrierSchema, { ...GLASS, ...range, expansionRange: words }).value).toMatchObject({
+        ...given,
+        expansionRange: "30 to 300 °C mean",
+      });
+    const own = { ...GLASS, ...range, expansionRange: "up to its strain point" };
+    expect(send(carrierSchema, own).value).toMatchObject({ expansionRange: "up to its strain point" });
+  });
+
+  it.each([
+    [{ meanExpansionFrom: "30 °C" }, "meanExpansionTo", "where the range ends too"],
+    [{ meanExpansionTo: "30 °C" }, "meanExpansionFrom", "where the range begins too"],
+    [{ meanExpansionFrom: "150 °C", meanExpansionTo: "25 °C" }, "meanExpansionTo", "ends before it begins"],
+    [{ meanExpansionFrom: "12 parsecs" }, "meanExpansionFrom", "parsecs is not a unit of temperature"],
+  ])("refuses the range %j", (range, at, words) => {
+    expect(send(carrierSchema, { ...GLASS, ...range }).errors[at]?.join(" ")).toContain(words);
+  });
+
+  it("takes no range for silicon", () => {
+    const { errors } = send(carrierSchema, {
+      ...SILICON_CARRIER,
+      meanExpansionFrom: "25 °C",
+      meanExpansionTo: "150 °C",
+    });
+    expect(errors["meanExpansionFrom"]?.[0]).toContain("silicon has its own curve");
+  });
+
   it("does not lose a tolerance or a note that stands beside a blank value", () => {
     for (const beside of ["expansion.tolerance", "expansion.note"]) {
       const { errors } = send(carrierSchema, { ...SILICON_CARRIER, [beside]: "0.1 ppm/K" });
@@ -118,6 +148,9 @@ describe("a bonding material's form", () => {
     [{ mostThickness: "5 um" }, "mostThickness", "less than the least"],
     [{ "softening.value": "" }, "softening.value", "flows above its softening point"],
     [{ flows: "" }, "release", "cannot slide off"],
+    [{ flows: "", ...property("flowPoint", "150 °C") }, "flowPoint.value", "Only a thermoplastic flows"],
+    [property("flowPoint", "110 °C"), "flowPoint.value", "cannot flow below 120\u00A0°C"],
+    [property("flowPoint", "210 °C"), "releaseTemperature.value", "at its flow point, 210\u00A0°C, or above"],
     [
       { "releaseTemperature.value": "100 °C" },
       "releaseTemperature.value",

@@ -133,7 +133,14 @@ describe("thicknesses as the trade says them", () => {
 describe("figures of a flow", () => {
   it("have their units, and say so where there are no steps", () => {
     const silicon = { name: "Silicon (001), 200 mm", diameter: 0.2 };
-    const figures = flowFigures({ silicon, incoming, thinnest: stated(um(100), um(3)), hottest: 518.15, rows: [1, 2] });
+    const figures = flowFigures({
+      silicon,
+      incoming,
+      incomingBow: null,
+      thinnest: stated(um(100), um(3)),
+      hottest: 518.15,
+      rows: [1, 2],
+    });
     expect(figures.map(({ value }) => value)).toEqual([
       "Silicon (001), 200 mm",
       "725\u00a0±\u00a015\u00a0µm",
@@ -141,7 +148,18 @@ describe("figures of a flow", () => {
       "245\u00a0°C",
       "2",
     ]);
-    const empty = flowFigures({ silicon, incoming, thinnest: null, hottest: null, rows: [] });
+    const empty = flowFigures({ silicon, incoming, incomingBow: null, thinnest: null, hottest: null, rows: [] });
     expect(empty.map(({ value }) => value).slice(2, 4)).toEqual(["no steps yet", "no steps yet"]);
+  });
+
+  it("say the bow that the wafer comes in with, once where both directions are alike", () => {
+    const silicon = { name: "Silicon (001), 200 mm", diameter: 0.2 };
+    const comesIn = (along: number, across: number) =>
+      flowFigures({
+        ...{ silicon, incoming, thinnest: null, hottest: null, rows: [] },
+        incomingBow: { along: stated(um(along)), across: stated(um(across)) },
+      })[1]?.value;
+    expect(comesIn(-90, -80)).toBe("725\u00a0±\u00a015\u00a0µm, bow −90\u00a0µm and −80\u00a0µm");
+    expect(comesIn(-90, -90)).toBe("725\u00a0±\u00a015\u00a0µm, bow −90\u00a0µm");
   });
 });
