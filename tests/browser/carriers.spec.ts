@@ -91,7 +91,7 @@ test.describe("forms", () => {
 
     await page.getByLabel("Name").fill("Browser slide adhesive");
     await page.getByLabel(/Thermoplastic: it flows/).check();
-    await fillProperty(page, "Softening point or glass transition", "110 °C", "supplier");
+    await fillProperty(page, "Softening point, as its data sheet gives it", "110 °C", "supplier");
     await fillProperty(page, "Highest temperature it may see while bonded", "12 parsecs", "supplier");
     await fillProperty(page, "Bond temperature", "170 C", "supplier");
     await page.getByLabel("How it lets go").selectOption("Thermal slide");
