@@ -4,6 +4,7 @@ import { SourceMark } from "#app/components/drawings/SourceMark.tsx";
 import { TitleBlock } from "#app/components/drawings/TitleBlock.tsx";
 import type { SelectedStep } from "#app/lib/assessment-selected.ts";
 import type { AssessmentView } from "#app/lib/assessment-view.ts";
+import { AssumedList } from "./AssumedList.tsx";
 import { BondList } from "./BondList.tsx";
 import { PaneSection } from "./PaneSection.tsx";
 import { RemedyList } from "./RemedyList.tsx";
@@ -29,16 +30,7 @@ export function SidePane({ view }: { view: AssessmentView }) {
               <p className="text-quiet">
                 {assumed.length} of {inputs}. Nobody measured or looked these up.
               </p>
-              <ul className="mt-1">
-                {assumed.map(({ step, what }) => (
-                  <li key={what} className="flex gap-3 border-t border-line py-1.5 first:border-t-0">
-                    <span className="flex-1">{noBreak(what)}</span>
-                    <StepLink step={step} className="link whitespace-nowrap">
-                      step {step}
-                    </StepLink>
-                  </li>
-                ))}
-              </ul>
+              <AssumedList assumed={assumed} />
             </>
           )}
         </PaneSection>
