@@ -9,7 +9,6 @@ import { BondList } from "./BondList.tsx";
 import { PaneSection } from "./PaneSection.tsx";
 import { RemedyList } from "./RemedyList.tsx";
 import { SmallestChanges } from "./SmallestChanges.tsx";
-import { StepLink } from "./StepLink.tsx";
 
 /** What follows from the answer: what clears it, which inputs matter, what was assumed, which bonds; and the title block. */
 export function SidePane({ view }: { view: AssessmentView }) {
