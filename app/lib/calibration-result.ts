@@ -9,6 +9,7 @@ import { formatQuantity, formatWithUncertainty } from "#app/engine/units/format.
 import type { MeasuredBow } from "#app/schemas/calibration.ts";
 import type { CalibrationResult, FittedValue, ResidualRow } from "./calibration-view.ts";
 import { formatMeasured, withoutUnit } from "./format-measured.ts";
+import type { ShownWorking } from "./shown-working.ts";
 
 type Fitted = Extract<Calibration, { kind: "fitted" }>;
 
@@ -66,10 +67,18 @@ function scatterOf({ chiSquare, degreesOfFreedom: free }: Fitted): { scatter: st
     : { scatter: `The bows scatter no more than their stated uncertainties allow: ${figures}.`, doubt: false };
 }
 
+interface CalibrationContext {
+  flow: FlowInput;
+  bond: BondInput;
+  bows: MeasuredBow[];
+  workings: ShownWorking[];
+  sent: [string, string][];
+}
+
 /** The engine's calibration in words and text. `sent` is what was fitted, as the form sent it. */
 export function calibrationResult(
   calibration: Calibration,
-  { flow, bond, bows, sent }: { flow: FlowInput; bond: BondInput; bows: MeasuredBow[]; sent: [string, string][] },
+  { flow, bond, bows, workings, sent }: CalibrationContext,
 ): CalibrationResult {
   if (calibration.kind === "refused") return calibration;
   const values = calibration.values.map((value) => fittedValue(value, bond));
@@ -82,6 +91,7 @@ export function calibrationResult(
     values,
     correlation: correlation === undefined ? null : formatNumber(correlation, { decimals: 2 }),
     residuals: residualRows(calibration, flow, bows),
+    workings,
     sent,
   };
 }

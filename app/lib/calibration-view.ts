@@ -1,5 +1,6 @@
 import type { SubmissionResult } from "@conform-to/react";
 import type { Calibrated } from "#app/engine/calibration/pair-model.ts";
+import type { ShownWorking } from "./shown-working.ts";
 
 /** What a calibration may fit, by its name in the form. */
 export const FITS = {
@@ -69,6 +70,8 @@ export type CalibrationResult =
       values: FittedValue[];
       correlation: string | null;
       residuals: ResidualRow[];
+      /** the calculation behind each value */
+      workings: ShownWorking[];
       /** what was fitted, to be sent back with 'Use these values' */
       sent: [name: string, value: string][];
     }

@@ -49,6 +49,8 @@ test("an engineer fits modulus and expansion to measured bows, and nothing is st
   const residuals = page.getByRole("table", { name: "Measured and computed bows, µm" });
   await expect(residuals.getByRole("row")).toHaveCount(5);
   await expect(residuals).toContainText("−410.0");
+  await page.getByText("Working", { exact: true }).click();
+  await expect(page.getByText("locked-in modulus of the bonding material").first()).toBeVisible();
   await expect(row(page, 4).getByLabel("Measured bow")).toHaveValue("-5 um");
   await expect(page.getByText("A process owner puts fitted values into the library.")).toBeVisible();
   await expect(page.getByRole("button", { name: "Use these values" })).toHaveCount(0);

@@ -4,11 +4,11 @@ import { SourceMark } from "#app/components/drawings/SourceMark.tsx";
 import { TitleBlock } from "#app/components/drawings/TitleBlock.tsx";
 import type { SelectedStep } from "#app/lib/assessment-selected.ts";
 import type { AssessmentView } from "#app/lib/assessment-view.ts";
+import { AssumedList } from "./AssumedList.tsx";
 import { BondList } from "./BondList.tsx";
 import { PaneSection } from "./PaneSection.tsx";
 import { RemedyList } from "./RemedyList.tsx";
 import { SmallestChanges } from "./SmallestChanges.tsx";
-import { StepLink } from "./StepLink.tsx";
 
 /** What follows from the answer: what clears it, which inputs matter, what was assumed, which bonds; and the title block. */
 export function SidePane({ view }: { view: AssessmentView }) {
@@ -29,16 +29,7 @@ export function SidePane({ view }: { view: AssessmentView }) {
               <p className="text-quiet">
                 {assumed.length} of {inputs}. Nobody measured or looked these up.
               </p>
-              <ul className="mt-1">
-                {assumed.map(({ step, what }) => (
-                  <li key={what} className="flex gap-3 border-t border-line py-1.5 first:border-t-0">
-                    <span className="flex-1">{noBreak(what)}</span>
-                    <StepLink step={step} className="link whitespace-nowrap">
-                      step {step}
-                    </StepLink>
-                  </li>
-                ))}
-              </ul>
+              <AssumedList assumed={assumed} />
             </>
           )}
         </PaneSection>

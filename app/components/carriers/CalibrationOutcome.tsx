@@ -1,6 +1,7 @@
 import { Form, useNavigation } from "react-router";
 import { noBreak } from "#app/components/drawings/no-break.ts";
 import { Notice } from "#app/components/ui/Notice.tsx";
+import { WorkingView } from "#app/components/working/WorkingView.tsx";
 import type { CalibrationResult, FittedValue, ResidualRow } from "#app/lib/calibration-view.ts";
 
 type Fitted = Extract<CalibrationResult, { kind: "fitted" }>;
@@ -13,7 +14,7 @@ export function CalibrationOutcome({ result, mayUse }: { result: CalibrationResu
         {result.wouldHelp ?? "Measure pairs after other steps, or state the values better first."}
       </Notice>
     );
-  const { answer, scatter, doubt, values, correlation, residuals } = result;
+  const { answer, scatter, doubt, values, correlation, residuals, workings } = result;
   return (
     <section className="frame mb-4 max-w-240" aria-labelledby="calibrated">
       <div className="p-4 tablet:p-6">
@@ -34,6 +35,14 @@ export function CalibrationOutcome({ result, mayUse }: { result: CalibrationResu
       </div>
       <Values values={values} />
       <Residuals rows={residuals} />
+      <details className="border-t border-ink p-4 tablet:px-6">
+        <summary className="link w-fit cursor-pointer">Working</summary>
+        <div className="mt-2 space-y-6">
+          {workings.map((working, index) => (
+            <WorkingView key={index} working={working} />
+          ))}
+        </div>
+      </details>
       <Use result={result} mayUse={mayUse} />
     </section>
   );

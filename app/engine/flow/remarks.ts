@@ -46,7 +46,7 @@ function unstatedFlowPoint({ peakTemperature }: StepInput, { bond }: WaferState)
 function incomingTakenAsFilm({ wafer: { incoming } }: FlowInput, number: number): string[] {
   if (number !== 1 || !incoming || incoming.filmShare !== null) return [];
   return [
-    "Nobody said which part of the incoming shape films cause: all of it is taken as film, which grows as 1/h^2 when the wafer is thinned.",
+    "Nobody said which part of the incoming shape films cause: all of it is taken as film, which grows with the inverse square of the thickness as the wafer is thinned.",
   ];
 }
 

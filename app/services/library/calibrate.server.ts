@@ -2,11 +2,13 @@ import { Carrier } from "#app/db/entities/carrier.ts";
 import type { BondingMaterial } from "#app/db/entities/bonding-material.ts";
 import type { EntityManager } from "@mikro-orm/postgresql";
 import { calibratePair, type CalibratedValue, type Calibration } from "#app/engine/calibration/calibrate-pair.ts";
+import { calibrationWorkings } from "#app/engine/calibration/working.ts";
 import { EngineInputError } from "#app/engine/errors.ts";
 import type { Measured } from "#app/engine/measured.ts";
 import { standardBow } from "#app/engine/stoney/bow.ts";
 import { toleranceOf } from "#app/lib/calibration-result.ts";
 import { FITS } from "#app/lib/calibration-view.ts";
+import { shownWorking, type ShownWorking } from "#app/lib/shown-working.ts";
 import type { CalibrationValues } from "#app/schemas/calibration.ts";
 import { notFound } from "#app/server/problem.server.ts";
 import { inScope, type ActorScope } from "#app/server/scope.server.ts";
@@ -24,7 +26,7 @@ export interface Versions {
 
 export type Calibrated =
   | { outcome: "fault"; formErrors?: string[]; fieldErrors?: Record<string, string[]> }
-  | { outcome: "computed"; calibration: Calibration; flow: PairFlow; versions: Versions };
+  | { outcome: "computed"; calibration: Calibration; workings: ShownWorking[]; flow: PairFlow; versions: Versions };
 
 interface Loaded {
   material: BondingMaterial;
@@ -65,7 +67,13 @@ function compute({ flow, versions }: Loaded, { fit, bows }: CalibrationValues): 
     standardUncertainty,
   }));
   try {
-    return { outcome: "computed", calibration: calibratePair(measurements, quantities), flow, versions };
+    return {
+      outcome: "computed",
+      calibration: calibratePair(measurements, quantities),
+      workings: calibrationWorkings(measurements, quantities).map(shownWorking),
+      flow,
+      versions,
+    };
   } catch (error) {
     if (!(error instanceof EngineInputError)) throw error;
     return { outcome: "fault", formErrors: [`These bows cannot be fitted: ${error.reason}.`] };

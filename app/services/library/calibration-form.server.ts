@@ -32,7 +32,7 @@ export async function calibrationForm(request: Request, scope: ActorScope, mater
 }
 
 function shown(
-  { calibration, flow, versions }: Extract<Calibrated, { outcome: "computed" }>,
+  { calibration, workings, flow, versions }: Extract<Calibrated, { outcome: "computed" }>,
   { bows }: CalibrationValues,
   formData: FormData,
 ) {
@@ -44,6 +44,7 @@ function shown(
     flow: flow.input,
     bond: flow.bond,
     bows,
+    workings,
     sent: [...fitted, ...seen],
   });
 }
