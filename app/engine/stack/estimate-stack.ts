@@ -41,24 +41,12 @@ export function coveredStress(film: StackFilm, temperature: number): number {
  * @throws EngineInputError naming the input
  */
 export function estimateStack(stack: StackInput): StackEstimate {
-  const { wafer, films } = stack;
-  const temperature = stack.temperature ?? ROOM_TEMPERATURE;
-  const radius = wafer.diameter / 2;
+  const radius = stack.wafer.diameter / 2;
   const { laminate, disc } = freeDisc(stack);
-  const biaxialModulus = siliconBiaxialModulus(wafer.orientation);
   const force = { front: 0, back: 0 };
-  let curvature = 0;
-  for (const film of films) {
-    const stress = coveredStress(film, temperature);
-    const bend = stoneyCurvature({
-      filmStress: stress,
-      filmThickness: film.thickness,
-      substrateThickness: wafer.thickness,
-      biaxialModulus,
-    });
-    curvature += film.side === "front" ? bend : -bend;
-    force[film.side] += filmForce({ stress, thickness: film.thickness });
-  }
+  const pulling = atItsTemperature(stack);
+  for (const { side, stress, thickness } of pulling.films) force[side] += filmForce({ stress, thickness });
+  const curvature = thinFilmCurvature(pulling);
   return {
     stoney: { curvature, sagitta: bowFromCurvature({ curvature, radius }) },
     laminate: { ...laminate, sagitta: bowFromCurvature({ curvature: laminate.curvature, radius }) },
@@ -66,6 +54,35 @@ export function estimateStack(stack: StackInput): StackEstimate {
     disc,
     filmForce: force,
   };
+}
+
+/** The same pull of the films without their expansion, which no thickness of silicon changes. */
+export function atItsTemperature({ wafer, films, temperature = ROOM_TEMPERATURE }: StackInput): StackInput {
+  return {
+    wafer,
+    films: films.map((film) => ({
+      ...film,
+      stress: coveredStress(film, temperature),
+      coverage: 1,
+      expansion: undefined,
+    })),
+  };
+}
+
+/** Curvature of the stack by the thin-film formula, the films' parts added up, 1/m. */
+export function thinFilmCurvature({ wafer, films, temperature = ROOM_TEMPERATURE }: StackInput): number {
+  const biaxialModulus = siliconBiaxialModulus(wafer.orientation);
+  let curvature = 0;
+  for (const film of films) {
+    const bend = stoneyCurvature({
+      filmStress: coveredStress(film, temperature),
+      filmThickness: film.thickness,
+      substrateThickness: wafer.thickness,
+      biaxialModulus,
+    });
+    curvature += film.side === "front" ? bend : -bend;
+  }
+  return curvature;
 }
 
 /** The stack as a laminate at its temperature, and the free disc that stands for it. */

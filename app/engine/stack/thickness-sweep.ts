@@ -6,7 +6,7 @@ import { bowFromCurvature } from "../stoney/bow.ts";
 import { laminateInputValues, laminateModel } from "../uncertainty/laminate-model.ts";
 import { shapeCurve, type ShapeCurve } from "../uncertainty/shape-curve.ts";
 import type { ShapeRegime } from "../vocabulary.ts";
-import { estimateStack, freeDisc, type StackDisc } from "./estimate-stack.ts";
+import { atItsTemperature, freeDisc, thinFilmCurvature, type StackDisc } from "./estimate-stack.ts";
 import { laminateOfStack } from "./laminate-of-stack.ts";
 import { withThickness, type StackInput } from "./model.ts";
 
@@ -31,8 +31,8 @@ export function thicknessSweep(stack: StackInput, range: { from: number; to: num
     throw new EngineInputError("sweep", "the range of thickness is empty", "0 m < from < to");
   if (!Number.isInteger(points) || points < 2 || points > 500)
     throw new EngineInputError("sweep.points", "the number of points is out of range", "2 to 500");
-  const thickest = estimateStack(withThickness(stack, to));
-  const { disc } = thickest;
+  const { disc } = freeDisc(withThickness(stack, to));
+  const pulling = atItsTemperature(stack);
   const layers = laminateOfStack(withThickness(stack, to));
   const place = layers.findIndex(({ cte }) => cte === "silicon");
   const curve = siliconCurve(disc);
@@ -53,9 +53,13 @@ export function thicknessSweep(stack: StackInput, range: { from: number; to: num
     const thickness = index === points - 1 ? to : from * (to / from) ** (index / (points - 1));
     inputs[place] = thickness;
     model.evaluate(inputs, 1, warp);
-    // Stoney's curvature goes with the inverse square of the silicon.
-    const linearWarp = Math.abs(thickest.stoney.sagitta) * (to / thickness) ** 2;
-    return { thickness, warp: warp[0] ?? 0, linearWarp, regime };
+    const curvature = thinFilmCurvature(withThickness(pulling, thickness));
+    return {
+      thickness,
+      warp: warp[0] ?? 0,
+      linearWarp: Math.abs(bowFromCurvature({ curvature, radius: disc.radius })),
+      regime,
+    };
   });
 }
 
