@@ -50,6 +50,8 @@ const OTHER: Record<string, InputProperty> = {
   incoming: { label: "Incoming shape" },
   x: { label: "Incoming curvature along the notch", dimension: "curvature", unit: "1/m", sign: true },
   y: { label: "Incoming curvature across the notch", dimension: "curvature", unit: "1/m", sign: true },
+  leastThickness: { label: "Thinnest bond it is made for", dimension: "length", unit: "µm" },
+  mostThickness: { label: "Thickest bond it is made for", dimension: "length", unit: "µm" },
   filmShare: { label: "Film part of the incoming shape", dimension: "fraction", unit: "%" },
   meanExpansionOver: { label: "Expansion is a mean over" },
   from: { label: "Expansion is a mean from", dimension: "temperature", unit: "°C" },

@@ -40,13 +40,15 @@ export function carrierHandlingOf({ reuseLimit, handling, ...carrier }: CarrierF
 
 interface MaterialFacts {
   thicknessVariationShare: Measured;
+  leastThickness: number;
+  mostThickness: number;
   thermalCycles?: number | null;
   handling: BondingMaterialHandlingValues;
 }
 
 /** What the handling rules ask of a bonding material. */
 export function bondingMaterialHandlingOf(material: MaterialFacts): BondingMaterialHandling {
-  const { thicknessVariationShare, thermalCycles, handling } = material;
+  const { thicknessVariationShare, leastThickness, mostThickness, thermalCycles, handling } = material;
   const { vacuum, plasma, solvent, acid, base, ultraviolet, attackedBy, ...rest } = handling;
   const resistances = given({
     vacuum,
@@ -59,6 +61,8 @@ export function bondingMaterialHandlingOf(material: MaterialFacts): BondingMater
   });
   return {
     thicknessVariationShare,
+    leastThickness,
+    mostThickness,
     ...given({
       resistances: Object.keys(resistances).length > 0 ? resistances : null,
       thermalCycles: cycles(thermalCycles),

@@ -96,6 +96,18 @@ const matched = (diameter: number) =>
     [30, 300],
   );
 
+/** Its mean lies near silicon's between room temperature and the usual bond: the pair stays the flattest. */
+const lowExpansion = (diameter: number) =>
+  glass(
+    "Aluminosilicate glass, low expansion",
+    diameter,
+    practice(72, 76, GPa),
+    0.22,
+    practice(2.9, 3.1, ppm),
+    assumed(2450, 40),
+    [30, 300],
+  );
+
 /** Carriers that a new site may start from. */
 export const REFERENCE_CARRIERS: ReferenceCarrier[] = [
   silicon(0.2, 725),
@@ -104,6 +116,8 @@ export const REFERENCE_CARRIERS: ReferenceCarrier[] = [
   borosilicate(0.3),
   matched(0.2),
   matched(0.3),
+  lowExpansion(0.2),
+  lowExpansion(0.3),
 ];
 
 interface ReferenceBondingMaterial {

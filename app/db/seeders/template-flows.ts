@@ -28,7 +28,7 @@ export const TEMPLATE_FLOWS: TemplateFlow[] = [
     diameter: 0.3,
     incoming: 775,
     steps: petrelSteps({
-      carrier: "Borosilicate glass, 300 mm",
+      carrier: "Aluminosilicate glass, low expansion, 300 mm",
       material: "Laser release on thermoset (class)",
       thickness: 50,
       peak: 180,

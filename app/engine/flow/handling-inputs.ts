@@ -123,6 +123,9 @@ export interface BondingMaterialHandling {
   resistances?: Resistances | null;
   /** its thickness variation as a share of its thickness; missing: the thickness budget of a pair cannot be judged */
   thicknessVariationShare?: Measured | null;
+  /** thinnest and thickest bond that it is made for, m; missing: no thickness is found fault with */
+  leastThickness?: number | null;
+  mostThickness?: number | null;
   /** highest temperature in vacuum, K; missing: the temperature limit alone */
   vacuumTemperatureLimit?: Measured | null;
   /** weight loss in vacuum at its limit, fraction */

@@ -146,7 +146,9 @@ function judgeMoment(
     remedy:
       outcome === "clear"
         ? null
-        : `Lower the film force or leave more silicon at this step, choose a carrier that bows less, or a tool that takes more than ${um(shape.warp)}.`,
+        : shape.regime === "curled"
+          ? "Hold it on tape, ring or carrier here, leave more silicon, or lower the film force: no tool takes a wafer that rolls up."
+          : `Lower the film force or leave more silicon at this step, choose a carrier that bows less, or a tool that takes more than ${um(shape.warp)}.`,
   };
 }
 

@@ -5,6 +5,7 @@ import { formatQuantity } from "../units/format.ts";
 import type { Outcome } from "../vocabulary.ts";
 import { bondBudget } from "./bond-budget.ts";
 import { bondChemistry } from "./bond-chemistry.ts";
+import { bondThickness } from "./bond-thickness.ts";
 import { againstUpperLimit, exceeds, reaches } from "./against-limit.ts";
 import type { Finding, Rule, RuleContext } from "./finding.ts";
 import { celsius, duration } from "./words.ts";
@@ -19,7 +20,7 @@ function bondUnderHeat(state: StepState) {
 function judge(context: RuleContext, state: StepState): Finding[] {
   const { limits } = context;
   const bond = bondUnderHeat(state);
-  if (!bond) return [];
+  if (!bond) return bondThickness(state);
   const { material } = bond;
   const peak = state.step.peakTemperature;
   const margin = limits.adhesiveMargin.value;
@@ -116,7 +117,7 @@ function aboveSoftening(state: StepState, material: BondMaterial, softensAt: num
 export const adhesiveRule: Rule = {
   number: 6,
   title: TITLE,
-  asks: "Does the bonding material stay below its temperature limit with its margin and hold time, and below the point where it flows; does it stand the vacuum, chemicals and light of every step between bond and debond, and all their heat together?",
+  asks: "Is the bond as thick as its material is made for? Does the material stay below its temperature limit with its margin and hold time, and below the point where it flows; does it stand the vacuum, chemicals and light of every step between bond and debond, and all their heat together?",
   limits: ["adhesiveMargin", "weightLossClear", "weightLoss", "heatingFrom"],
   judge,
 };

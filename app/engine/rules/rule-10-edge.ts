@@ -33,13 +33,14 @@ function trimDepth(context: RuleContext, state: StepState): Finding[] {
   // Between the final silicon and its reserve it is a caution, and so is exactly the reserve.
   const outcome = knife ? "do not run" : exceeds(depth - final.most, reserve) ? "clear" : "caution";
   const left = depth - final.most;
+  const trimmed = `Trimmed ${edgeTrim.depth.tolerance ? "at least " : ""}${micrometres(depth)} deep`;
   return [
     make(
       state,
       outcome,
       knife
-        ? `Trimmed ${micrometres(depth)} deep, at most ${micrometres(final.most)} of silicon stay: the grind leaves a knife edge.`
-        : `Trimmed ${micrometres(depth)} deep for at most ${micrometres(final.most)} of silicon: ${micrometres(left)} deeper, at least ${micrometres(reserve)} asked.`,
+        ? `${trimmed}, at most ${micrometres(final.most)} of silicon stay: the grind leaves a knife edge.`
+        : `${trimmed} for at most ${micrometres(final.most)} of silicon: ${micrometres(left)} deeper, at least ${micrometres(reserve)} asked.`,
       {
         remedy: `Trim at least ${micrometres(final.most + reserve)} deep.`,
         figures: [

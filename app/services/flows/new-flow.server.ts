@@ -46,8 +46,9 @@ export async function createFlow(
 
 const LONGEST_NAME = 120;
 
-/** 'Name, copy', 'Name, copy 2', … : the first that is free. */
-function copyName(name: string, taken: Set<string>): string {
+/** 'Name, copy', 'Name, copy 2', … : the first that is free. The copy of a copy is the next copy of the original. */
+function copyName(original: string, taken: Set<string>): string {
+  const name = original.replace(/, copy( \d+)?$/, "");
   for (let count = 1; ; count++) {
     const suffix = count === 1 ? ", copy" : `, copy ${count}`;
     const candidate = name.slice(0, LONGEST_NAME - suffix.length) + suffix;

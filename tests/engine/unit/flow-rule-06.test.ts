@@ -187,3 +187,31 @@ describe("rule 6, heat added up", () => {
     expect(outcomes(near, 6)).toEqual(outcome);
   });
 });
+
+describe("rule 6, thickness of the bond", () => {
+  const range = { leastThickness: 20e-6, mostThickness: 80e-6 };
+  const bonded = (thickness: number, material: Partial<BondingMaterialInput>) => {
+    const made = bondStep({}, adhesive(material));
+    return flow([{ ...made, bond: made.bond && { ...made.bond, thickness: exact(thickness * 1e-6) } }]);
+  };
+
+  it.each([
+    { thickness: 19, outcome: ["caution"] },
+    { thickness: 20, outcome: [] },
+    { thickness: 50, outcome: [] },
+    { thickness: 80, outcome: [] },
+    { thickness: 81, outcome: ["caution"] },
+  ])("$thickness µm of a material made for 20 to 80 µm: $outcome", ({ thickness, outcome }) => {
+    expect(outcomes(bonded(thickness, range), 6, { at: 1 })).toEqual(outcome);
+  });
+
+  it("names the end that is passed and what would clear it", () => {
+    const [found] = findings(bonded(10, range), 6, { at: 1 });
+    expect(found?.reason).toContain("10\u00a0µm thick; Adhesive is made for bonds from 20\u00a0µm up");
+    expect(found?.limit).toMatchObject({ label: "Adhesive, thinnest bond", value: 20e-6 });
+  });
+
+  it("finds no fault where nobody says what it is made for", () => {
+    expect(outcomes(bonded(500, {}), 6, { at: 1 })).toEqual([]);
+  });
+});

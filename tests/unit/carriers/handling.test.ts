@@ -34,8 +34,9 @@ describe("what the rules ask, left blank", () => {
     expect(equipmentHandlingOf(BLANK_TOOL_HANDLING)).toEqual({});
     expect(filmHandlingOf(BLANK_FILM_HANDLING)).toEqual({});
     expect(stressRecordOf({ stress: { ...stated(1e6), on: "2026-10-21" }, handling: BLANK_FILM_HANDLING })).toBeNull();
-    const material = { thicknessVariationShare: stated(0.05), thermalCycles: null, handling: BLANK_MATERIAL_HANDLING };
-    expect(bondingMaterialHandlingOf(material)).toEqual({ thicknessVariationShare: stated(0.05) });
+    const always = { thicknessVariationShare: stated(0.05), leastThickness: 20e-6, mostThickness: 80e-6 };
+    const material = { ...always, thermalCycles: null, handling: BLANK_MATERIAL_HANDLING };
+    expect(bondingMaterialHandlingOf(material)).toEqual(always);
   });
 });
 
@@ -127,9 +128,8 @@ describe("a bonding material", () => {
       attackedBy: ["ketone" as const],
       remover: "ketone" as const,
     };
-    expect(
-      bondingMaterialHandlingOf({ thicknessVariationShare: stated(0.04), thermalCycles: 5, handling }),
-    ).toMatchObject({
+    const always = { thicknessVariationShare: stated(0.04), leastThickness: 20e-6, mostThickness: 80e-6 };
+    expect(bondingMaterialHandlingOf({ ...always, thermalCycles: 5, handling })).toMatchObject({
       resistances: { base: { word: "resists", longest: 1800 }, attackedBy: ["ketone"] },
       remover: "ketone",
       thermalCycles: { value: 5, source: "assumed" },
