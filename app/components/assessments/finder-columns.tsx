@@ -9,7 +9,11 @@ import { TryOnCopy } from "./TryOnCopy.tsx";
 /** Thickness in µm as the list shows it. */
 const micrometres = (thickness: number) => String(Number((thickness * 1e6).toPrecision(4)));
 
-const percent = (margin: number) => `${margin < 0 ? "−" : ""}${Math.abs(Math.round(margin * 100))} %`;
+/** Rounded first: what rounds to nothing has no sign. */
+function percent(margin: number): string {
+  const whole = Math.round(margin * 100);
+  return `${whole < 0 ? "−" : ""}${Math.abs(whole)} %`;
+}
 
 /** Columns of the finder. On a phone the bond stands under its carrier. */
 export function finderColumns(head: TrialHead): Column<FinderRow>[] {
@@ -18,12 +22,13 @@ export function finderColumns(head: TrialHead): Column<FinderRow>[] {
       key: "carrier",
       head: "Carrier",
       sortable: true,
-      cell: ({ carrier, material, thickness, planned }) => (
+      cell: ({ carrier, material, thickness, planned, fits, margin }) => (
         <>
           {noBreak(carrier)}
           {planned ? <span className="text-quiet">, as planned</span> : null}
           <span className="block text-quiet tablet:hidden">
             {noBreak(material)}, {micrometres(thickness)}&nbsp;µm
+            {fits && margin !== null ? `; margin ${percent(margin)}` : null}
           </span>
         </>
       ),
@@ -54,6 +59,7 @@ export function finderColumns(head: TrialHead): Column<FinderRow>[] {
       head: "Margin",
       numeric: true,
       sortable: true,
+      wide: true,
       cell: ({ margin, fits }) => (fits && margin !== null ? percent(margin) : ""),
     },
     { key: "finding", head: "Finding", cell: (row) => <FinderFinding row={row} head={head} /> },
