@@ -21,8 +21,7 @@ export function marksOf(split: Split, stated: { decimalMark?: DecimalMark; thous
   const seen: Seen = {};
   let grouped: Thousands = "none";
   split.rows.slice(split.first).forEach((cells, n) => {
-    for (const column of split.dataColumns) {
-      const text = cells[column] ?? "";
+    for (const [column, text] of cells.entries()) {
       const { kind, thousands } = markEvidence(text);
       if (kind === null) continue;
       if (thousands !== "none") grouped = thousands;

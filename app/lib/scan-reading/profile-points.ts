@@ -1,7 +1,7 @@
 import type { ProfilePoint } from "#app/engine/profile/points.ts";
 
 /** Points that a fit is given; instruments write far more than a parabola or its residuals can show. */
-export const FITTED_POINTS = 20_000;
+export const FITTED_POINTS = 10_000;
 
 /**
  * The points of a profile for the engine. More than `most` become the means of equal stretches: a parabola keeps its curvature

@@ -55,7 +55,6 @@ export class ProfileRows {
   readonly #read;
   readonly #faults = new FaultList();
   #rows = 0;
-  #points = 0;
   /** lines of words that are a footer unless more data follow */
   #words: Place[] = [];
   #wordLines = 0;
@@ -124,12 +123,13 @@ export class ProfileRows {
 
   #refuseTooMany(): void {
     const points = this.#pairs.reduce((sum, { x }) => sum + x.length, 0);
-    this.#points = points;
     if (this.#rows > MOST_ROWS)
       throw new ScanFileError(
         `${this.#name} has more than ${MOST_ROWS} rows of data; up to that many are read. Export one point in two, or fewer.`,
       );
-    if (this.#points > MOST_POINTS)
+    // Half of what may be read is faulty already: the rest cannot make up for it.
+    if (this.#faults.rows > MOST_ROWS / 2) this.#refuseUnusable(this.#faults.list());
+    if (points > MOST_POINTS)
       throw new ScanFileError(
         `${this.#name} has more than ${MOST_POINTS} points in its ${this.#pairs.length} profiles. Export fewer points or fewer profiles.`,
       );
@@ -142,8 +142,8 @@ export class ProfileRows {
       this.#read(cells[pair.position] ?? ""),
       this.#read(cells[pair.height] ?? ""),
     ]);
-    const some = read.some(([x = NaN, z = NaN]) => x === x || z === z);
-    if (!some && this.#isWordLine(cells)) {
+    const whole = read.some(([x = NaN, z = NaN]) => x === x && z === z);
+    if (!whole && this.#isWordLine(cells)) {
       this.#noteWords(cells, row);
       return;
     }
@@ -245,7 +245,8 @@ export class ProfileRows {
   #checked(pair: ColumnPair, x: Float64Array, z: Float64Array): FileProfile {
     let [from, to, low, high] = [Infinity, -Infinity, Infinity, -Infinity];
     for (let n = 0; n < x.length; n += 1) {
-      const [position = 0, height = 0] = [x[n], z[n]];
+      const position = x[n] ?? 0;
+      const height = z[n] ?? 0;
       if (position < from) from = position;
       if (position > to) to = position;
       if (height < low) low = height;

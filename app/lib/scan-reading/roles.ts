@@ -52,7 +52,10 @@ const HEADS: readonly (readonly [ColumnRole, RegExp])[] = [
   ["lot", /^(?:lot|batch)\b/],
   ["slot", /^slot\b/],
   ["wafer", /^(?:wafer|wid|scribe)\b/],
-  ["height", /^(?:z|h)\b|\bheight|\btopograph|\bprofile\b|\bdeflection\b|\belevation\b|\bsurface\b|^level\b|^raw\b/],
+  [
+    "height",
+    /^(?:z|h)\b|\bheight|\btopograph|\bprofile\b|\bdeflection\b|\belevation\b|\bsurface\b|^(?:level|raw|pre|post|before|after)\b/,
+  ],
   ["position", /^(?:x|pos)\b|\bposition\b|\blateral\b|\bdistance\b|^scan\b/],
   ["radius", /^(?:r|radius|radial)\b/],
   ["y", /^y\b/],

@@ -44,11 +44,7 @@ export function rowSource(name: string, delimiter: string, sink: RowSink): RowSo
 
   const refuseTooLong = () => {
     if (rest.length <= LONGEST_LINE) return;
-    throw new ScanFileError(
-      rest.includes("\n")
-        ? unclosedSentence(name, next)
-        : `${name}: row ${next} has more than ${LONGEST_LINE} characters and no line end. A table of points has one point in a row.`,
-    );
+    throw new ScanFileError(rest.includes('"') ? unclosedSentence(name, next) : endlessSentence(name, next));
   };
 
   return {
@@ -74,6 +70,10 @@ export function rowSource(name: string, delimiter: string, sink: RowSink): RowSo
     },
   };
 }
+
+/** What is said of a line that is none of a table. */
+export const endlessSentence = (name: string, row: number) =>
+  `${name}: row ${row} has more than ${LONGEST_LINE} characters and no line end. A table of points has one point in a row.`;
 
 const unclosedSentence = (name: string, row: number) =>
   `${name}, row ${row}: a quotation mark is opened and never closed. Close it, or export without quotation marks.`;

@@ -6,7 +6,7 @@ import { ProfileRows, type ProfileFile } from "./profile-rows.ts";
 import type { Reading } from "./reading.ts";
 import { reducedStressOf, type ReducedStresses } from "./reduced-stress.ts";
 import { ScanFileError } from "./refusal.ts";
-import { LONGEST_LINE, rowSource, type RowSource } from "./row-source.ts";
+import { endlessSentence, LONGEST_LINE, rowSource, type RowSource } from "./row-source.ts";
 import { summaryOf, type Summary } from "./summary.ts";
 import { TableRows } from "./table-rows.ts";
 import { thicknessMapOf, type ThicknessMap } from "./thickness-map.ts";
@@ -14,7 +14,7 @@ import { thicknessMapOf, type ThicknessMap } from "./thickness-map.ts";
 /** Characters from which the layout is told. */
 const SAMPLE = 128 * 1024;
 /** Bytes that are decoded at once, so that text and cells of a large file never exist all together. */
-const PIECE = 256 * 1024;
+const PIECE = 64 * 1024;
 
 export type FileContent =
   | ({ kind: "profiles" } & ProfileFile)
@@ -64,7 +64,8 @@ export function scanReader(fileName: string, profile: ImportProfile = {}): ScanR
     if (running) running.source.push(text);
     else {
       sample += text;
-      if (sample.length > LONGEST_LINE && !/[\r\n]/.test(sample.slice(0, LONGEST_LINE))) refuseOneLine(name);
+      if (sample.length > LONGEST_LINE && !/[\r\n]/.test(sample.slice(0, LONGEST_LINE)))
+        throw new ScanFileError(endlessSentence(name, 1));
       if (sample.length < SAMPLE || !/[\r\n]/.test(sample)) return;
       begin(sample);
       sample = "";
@@ -125,12 +126,6 @@ function contentOf(
     case "reduced stress":
       return { take, finish: () => ({ kind, ...reducedStressOf(table) }) };
   }
-}
-
-function refuseOneLine(name: string): never {
-  throw new ScanFileError(
-    `${name}: row 1 has more than ${LONGEST_LINE} characters and no line end. A table of points has one point in a row.`,
-  );
 }
 
 /** Control characters that no text of an instrument holds. */

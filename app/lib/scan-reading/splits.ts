@@ -36,7 +36,22 @@ export function bestSplit(name: string, sample: string, stated: string | null, m
   // Under a decimal comma a comma stands between columns only where the numbers are quoted.
   const possible = mark === "comma" && !text.includes('"') ? DELIMITERS.filter((sign) => sign !== ",") : DELIMITERS;
   const candidates = stated === null ? possible : [stated];
-  const [first, ...others] = candidates.map((delimiter) => splitAt(name, text, delimiter, mark));
+  const best = bestOf(name, text, candidates, mark, [";", "\t", "|"]);
+  // Between commas '5 200' is rather two columns parted by a blank, unless that leaves no table.
+  return best.dataColumns.length > 1 ? best : bestOf(name, text, candidates, mark, [";", "\t", "|", ","]);
+}
+
+/** @param groupedByBlanks delimiters between which a blank may group thousands */
+function bestOf(
+  name: string,
+  text: string,
+  candidates: readonly string[],
+  mark: DecimalMark | null,
+  groupedByBlanks: readonly string[],
+): Split {
+  const [first, ...others] = candidates.map((delimiter) =>
+    splitAt(name, text, delimiter, mark, groupedByBlanks.includes(delimiter)),
+  );
   if (!first) throw new Error("there is always a delimiter to try");
   const tabs = [first, ...others].some(({ delimiter, score }) => delimiter === "\t" && score > 0);
   return others
@@ -44,9 +59,8 @@ export function bestSplit(name: string, sample: string, stated: string | null, m
     .reduce((best, next) => (next.score > best.score * (1 + 1e-9) ? next : best), first);
 }
 
-function splitAt(name: string, text: string, delimiter: string, mark: DecimalMark | null): Split {
+function splitAt(name: string, text: string, delimiter: string, mark: DecimalMark | null, blanksGroup: boolean): Split {
   const rows = rowsOf(name, text, delimiter);
-  const blanksGroup = delimiter !== " " && delimiter !== ",";
   const numeric = rows.map((cells) =>
     cells.slice(0, MOST_LOOKED_AT).map((cell) => looksNumeric(cell, mark, blanksGroup)),
   );

@@ -91,7 +91,7 @@ const POWERED = /^(?:1(?:\.0)?\s*)?[x×*]?\s*(?:E\+?|10\^?)0?(\d{1,2})\s*[x×*]?
 function dynesOrPascals(text: string): ReadUnit | null {
   const powered = POWERED.exec(text);
   const base = (powered?.[2] ?? text).replace(/\s+/g, "");
-  const dynes = /^dynes?\/cm(?:\^?2|²)$/i.test(base);
+  const dynes = /^dyne?s?\/cm(?:\^?2|²)$/i.test(base);
   if (!powered) return dynes ? "dyn/cm²" : null;
   const power = Number(powered[1]);
   if (dynes && (power === 9 || power === 10)) return power === 9 ? "1E9 dyn/cm²" : "1E10 dyn/cm²";

@@ -3,7 +3,7 @@ import type { ImportProfile } from "#app/schemas/import-profile.ts";
 import { isFormula, isMissing, looksNumeric } from "./numbers.ts";
 import type { DecimalMark } from "./reading.ts";
 import { ScanFileError } from "./refusal.ts";
-import { bestSplit, isBlank, type Split } from "./splits.ts";
+import { bestSplit, type Split } from "./splits.ts";
 
 export const MOST_COLUMNS = 512;
 const LONGEST_CELL = 40;
@@ -24,23 +24,27 @@ export const tooWideSentence = (name: string, row: number, columns: number) =>
  * @throws ScanFileError always
  */
 export function refuseNoTable(name: string, sample: string, profile: ImportProfile, split: Split): never {
-  const { rows } = split;
   const mark = profile.decimalMark ?? null;
   refuseFormulas(name, split);
   refuseOneColumn(name, sample, mark);
   if (mark !== null) refuseOtherMark(name, sample, mark, split);
-  const filled = rows.filter((cells) => !isBlank(cells));
-  const data = filled.filter((cells) => cells.every(isMissing));
-  if (data.length > 0 && data.length >= filled.length / 2)
-    throw new ScanFileError(
-      `${name} has no row of numbers: ${data.length} of its first ${filled.length} rows hold words for missing values only, such as “${excerpt(data[0]?.join(split.delimiter) ?? "", LONGEST_CELL)}”.`,
-    );
+  refuseNoValues(name, sample);
   if (profile.delimiter !== undefined)
     throw new ScanFileError(
       `${name} has no row of numbers when it is split at “${profile.delimiter}”; its first line is “${firstLine(sample)}”.`,
     );
   throw new ScanFileError(
     `${name} has no row of numbers. It needs two columns, position and height; its first line is “${firstLine(sample)}”.`,
+  );
+}
+
+function refuseNoValues(name: string, sample: string): void {
+  const lines = sample.split("\n").filter((line) => line.trim() !== "");
+  const empty = lines.filter((line) => line.split(/[;,|\s]+/).every(isMissing));
+  const [shown] = empty;
+  if (shown === undefined || empty.length < lines.length / 2) return;
+  throw new ScanFileError(
+    `${name} has no row of numbers: ${empty.length} of its first ${lines.length} rows hold words for missing values only, such as “${excerpt(shown, LONGEST_CELL)}”.`,
   );
 }
 
