@@ -28,7 +28,7 @@ export function marksOf(split: Split, stated: { decimalMark?: DecimalMark; thous
       if (kind !== "none") seen[kind] ??= { row: split.first + n + 1, column, text: excerpt(text, 40) };
     }
   });
-  const proved = settled(seen, split.delimiter);
+  const proved = settled(seen, split);
   const mark = stated.decimalMark ?? (typeof proved === "string" ? proved : null);
   if (mark === null && proved !== null && typeof proved === "object")
     return {
@@ -69,15 +69,15 @@ const question = (what: Ambiguity["what"], sentence: string, choices: string[]):
 });
 
 /** The mark that is proved, nothing when no number has one, or why it is open. */
-function settled(seen: Seen, delimiter: string): DecimalMark | null | { sentence: string } {
+function settled(seen: Seen, { delimiter, quoted }: Split): DecimalMark | null | { sentence: string } {
   if (seen.point && seen.comma)
     return {
       sentence: `row ${seen.point.row} holds “${seen.point.text}” and row ${seen.comma.row} “${seen.comma.text}”: the file has both decimal points and decimal commas.`,
     };
   if (seen.point) return "point";
   if (seen.comma) return "comma";
-  // A file that parts its columns by commas has no use for them elsewhere, so its points are decimal.
-  if (seen["either point"] && !seen["either comma"] && delimiter === ",") return "point";
+  // Unquoted cells between commas hold no decimal commas, so their points are decimal.
+  if (seen["either point"] && !seen["either comma"] && delimiter === "," && !quoted) return "point";
   const open = seen["either comma"] ?? seen["either point"];
   return open ? { sentence: `row ${open.row} holds “${open.text}”: ${bothWays(open.text)}.` } : null;
 }

@@ -10,6 +10,8 @@ const MOST_LOOKED_AT = 512;
 /** A sample of a file under one delimiter. */
 export interface Split {
   delimiter: string;
+  /** whether the sample has a quotation mark, so that a cell may hold the delimiter */
+  quoted: boolean;
   rows: string[][];
   /** whether a cell could be a number, by row and column */
   numeric: boolean[][];
@@ -61,6 +63,7 @@ function bestOf(
 
 function splitAt(name: string, text: string, delimiter: string, mark: DecimalMark | null, blanksGroup: boolean): Split {
   const rows = rowsOf(name, text, delimiter);
+  const quoted = text.includes('"');
   const numeric = rows.map((cells) =>
     cells.slice(0, MOST_LOOKED_AT).map((cell) => looksNumeric(cell, mark, blanksGroup)),
   );
@@ -87,10 +90,11 @@ function splitAt(name: string, text: string, delimiter: string, mark: DecimalMar
     if (usual === null || score > usual.score)
       usual = { row: found.row, score, form: form.slice(form.indexOf(":") + 1) };
   }
-  if (usual === null) return { delimiter, rows, numeric, cells: 0, dataColumns: [], first: -1, score: 0 };
+  if (usual === null) return { delimiter, quoted, rows, numeric, cells: 0, dataColumns: [], first: -1, score: 0 };
   const dataColumns = [...usual.form].flatMap((sign, n) => (sign === "1" ? [n] : []));
   const split: Split = {
     delimiter,
+    quoted,
     rows,
     numeric,
     cells: rows[usual.row]?.length ?? 0,
