@@ -73,12 +73,16 @@ function headCells(row: readonly string[], { delimiter, cells }: Split): string[
   return cells > 1 && parts.length === 1 ? headsOfWords(only.split(/\s+/), cells) : [];
 }
 
+const JOIN = "\u0000";
+
 /** Heads that are parted like their own words: 'x (mm) z (µm)', or 'Position mm Height nm'. */
 function headsOfWords(words: readonly string[], columns: number): string[] {
+  // A unit in brackets belongs to the word before it.
   const parts = words
     .join(" ")
-    .replace(/ (?=[([])/g, "")
-    .split(" ");
+    .replace(/ (?=[([])/g, JOIN)
+    .split(" ")
+    .map((part) => part.replaceAll(JOIN, " "));
   if (parts.length === columns) return parts.map((part) => part.replace(/[,;]$/, ""));
   const heads: string[] = [];
   let open = "";

@@ -5,7 +5,6 @@ export type Encoding = (typeof ENCODINGS)[number];
 
 /** What stands between columns; a blank stands for any run of blanks and tabs. */
 export const DELIMITERS = [";", "\t", ",", "|", " "] as const;
-export type Delimiter = (typeof DELIMITERS)[number];
 
 /** Mark that sets off the decimals in a file. */
 export const DECIMAL_MARKS = ["point", "comma"] as const;

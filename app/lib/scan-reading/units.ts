@@ -1,4 +1,4 @@
-import type { LengthUnit, ReadUnit } from "./reading.ts";
+import type { ReadUnit } from "./reading.ts";
 
 export type Dimension = "length" | "stress" | "angle";
 
@@ -129,5 +129,3 @@ export function headWithoutUnit(head: string): string {
     ? word
     : unbracketed;
 }
-
-export const isLength = (unit: ReadUnit): unit is LengthUnit => dimensionOf(unit) === "length";
