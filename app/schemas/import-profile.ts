@@ -8,6 +8,7 @@ import {
   READ_UNITS,
   THOUSANDS,
 } from "#app/lib/scan-reading/reading.ts";
+import type { RecordStamp } from "./record-stamp.ts";
 
 const column = z
   .strictObject({
@@ -58,3 +59,21 @@ export const importProfileSchema = z.strictObject({
   underneath: z.enum(["nothing", "tape", "carrier"]).optional(),
 });
 export type ImportProfile = z.output<typeof importProfileSchema>;
+
+/** An import profile under the name of its instrument. */
+export const importProfileRecordSchema = z.strictObject({
+  name: z
+    .string("Name the instrument.")
+    .trim()
+    .min(1, "Name the instrument.")
+    .max(80, "Keep the name under 80 characters.")
+    .regex(/^\P{Cc}*$/u, "The name holds a character that cannot be shown. Type it anew."),
+  profile: importProfileSchema,
+});
+export type ImportProfileValues = z.output<typeof importProfileRecordSchema>;
+
+/** An instrument's import profile, as a list shows it. */
+export interface ImportProfileRow extends ImportProfileValues {
+  id: string;
+  stamp: RecordStamp;
+}
