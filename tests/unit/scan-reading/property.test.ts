@@ -82,7 +82,7 @@ describe("whatever the style of a file", () => {
     );
     // Of a file that names its units little is left to ask.
     expect(read).toBeGreaterThan(asked);
-  });
+  }, 60_000);
 });
 
 describe("numbers", () => {
@@ -106,7 +106,7 @@ describe("numbers", () => {
       ),
       { seed: SEED, numRuns: 2000 },
     );
-  });
+  }, 60_000);
 
   it.each(["", " ", ".", "-", "+-1", "1.2.3", "0x1F", "1e", "1_000", "Infinity", "1e999", "1 2", "12a", "NaN", "1,5"])(
     "'%s' is none with a decimal point",
