@@ -86,12 +86,16 @@ describe("files that are none, or mean harm, are turned down at once", () => {
       () => new Uint8Array([...bytes(SCAN + "1.5,2.5\n".repeat(50_000)), 0xb5, 0x0a]),
       /begins as UTF-8 but is not UTF-8 any more after byte \d+/,
     ],
-  ])("%s", (_, content, says) => {
-    const given = content();
-    const start = processorTime();
-    expect(refusalOf(given)).toMatch(says);
-    expect(processorTime() - start).toBeLessThan(SECONDS);
-  }, 60_000);
+  ])(
+    "%s",
+    (_, content, says) => {
+      const given = content();
+      const start = processorTime();
+      expect(refusalOf(given)).toMatch(says);
+      expect(processorTime() - start).toBeLessThan(SECONDS);
+    },
+    60_000,
+  );
 });
 
 describe("reading stops", () => {
