@@ -52,7 +52,7 @@ export function marksOf(split: Split, stated: { decimalMark?: DecimalMark; thous
     ambiguity: unproved
       ? question(
           "decimal mark",
-          `row ${other.row} holds “${other.text}”: ${bothWays(other.text)}. A decimal ${mark} is chosen; choose ${mark === "point" ? "comma" : "point"} if that is how it was written, or say that its thousands are grouped.`,
+          `row ${other.row} holds “${other.text}”: ${bothWays(other.text)}. A decimal ${mark} is chosen; choose ${mark === "point" ? "comma" : "point"} if that is how it was written. If its thousands are grouped, export without grouping them, or say so.`,
           ["thousands", mark === "point" ? "comma" : "point"],
         )
       : null,
