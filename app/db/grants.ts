@@ -23,6 +23,7 @@ const READ_AND_WRITE = [
   "flow_step_film",
   "step_template",
   "flow_template",
+  "import_profile",
   "scan",
 ];
 

@@ -1,7 +1,7 @@
 import { formatQuantity } from "#app/engine/units/format.ts";
 import type { FileReading } from "#app/schemas/scan-result.ts";
-import type { ReadProfile } from "./profile-csv.ts";
-import { ProfileFileError } from "./profile-text.ts";
+import type { ReadProfile } from "./scan-reading/one-profile.ts";
+import { ScanFileError } from "./scan-reading/refusal.ts";
 
 export interface ScannedWafer {
   /** m */
@@ -19,18 +19,18 @@ const range = ({ from, to }: FileReading) =>
 
 /**
  * Holds a profile against the wafer that it is said to be of: a wrong unit shows here.
- * @throws ProfileFileError when positions or heights cannot be of that wafer
+ * @throws ScanFileError when positions or heights cannot be of that wafer
  */
 export function checkOnWafer({ points, reading }: ReadProfile, name: string, wafer: ScannedWafer): void {
   const span = reading.to - reading.from;
   const diameter = formatQuantity(wafer.diameter, "length", { unit: "mm" });
-  if (span === 0) throw new ProfileFileError(`${name}: all rows have the same position, ${length(reading.from)}.`);
+  if (span === 0) throw new ScanFileError(`${name}: all rows have the same position, ${length(reading.from)}.`);
   if (span > wafer.diameter * LONGEST_OVER_DIAMETER)
-    throw new ProfileFileError(
+    throw new ScanFileError(
       `${name}: the positions run over ${length(span)}, but the wafer measures ${diameter}. Check the unit of the position and the diameter.`,
     );
   if (span <= 2 * wafer.edgeExclusion)
-    throw new ProfileFileError(
+    throw new ScanFileError(
       `${name}: the positions run over ${length(span)}; with ${length(wafer.edgeExclusion)} left out at either end nothing remains. Check the unit of the position, or leave out less.`,
     );
   const heights = points.reduce(({ low, high }, { z }) => ({ low: Math.min(low, z), high: Math.max(high, z) }), {
@@ -38,14 +38,14 @@ export function checkOnWafer({ points, reading }: ReadProfile, name: string, waf
     high: -Infinity,
   });
   if (heights.high - heights.low > wafer.diameter / 2)
-    throw new ProfileFileError(
+    throw new ScanFileError(
       `${name}: the heights differ by ${length(heights.high - heights.low)}, more than the radius of the wafer. Check the unit of the height.`,
     );
 }
 
 /**
  * Holds two profiles against each other.
- * @throws ProfileFileError when they do not cover a common stretch that is long enough
+ * @throws ScanFileError when they do not cover a common stretch that is long enough
  */
 export function checkTogether(
   before: { name: string; profile: ReadProfile },
@@ -56,7 +56,7 @@ export function checkTogether(
   const common = Math.min(first.to, second.to) - Math.max(first.from, second.from);
   if (common > 2 * edgeExclusion) return;
   const where = `${before.name} runs from ${range(first)}, ${after.name} from ${range(second)}`;
-  throw new ProfileFileError(
+  throw new ScanFileError(
     common <= 0
       ? `The positions do not overlap: ${where}. Both scans must lie on the same line of the wafer.`
       : `The positions overlap over ${length(common)} only: ${where}. With ${length(edgeExclusion)} left out at either end nothing remains.`,

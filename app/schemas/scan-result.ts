@@ -1,4 +1,4 @@
-import type { DecimalMark, LengthUnit } from "#app/lib/scan-file.ts";
+import type { DecimalMark, LengthUnit } from "#app/lib/scan-reading/reading.ts";
 
 /** What a scan was computed with, SI where it is a quantity. */
 export interface ScanParameters {
@@ -26,8 +26,10 @@ export interface FileReading {
   /** rows of data, used or not */
   rows: number;
   used: number;
-  /** columns that a row has; the first two are read */
+  /** columns that a row has */
   columns: number;
+  /** places of position and height among them, from 0; the first two where a stored reading does not say */
+  readColumns?: [position: number, height: number];
   heading: string | null;
   delimiter: string;
   /** least and greatest position, m */
@@ -35,6 +37,8 @@ export interface FileReading {
   to: number;
   skipped: SkippedRow[];
   skippedInAll: number;
+  /** points that the fit was given in place of those used, each the mean of a stretch; left out when it was given all */
+  averagedTo?: number;
 }
 
 /** Share of one input in the uncertainty of the stress. `given` is false where nobody stated a tolerance. */

@@ -1,5 +1,5 @@
 import { z } from "zod";
-import { DECIMAL_MARKS, LENGTH_UNITS } from "#app/lib/scan-file.ts";
+import { DECIMAL_MARKS, LENGTH_UNITS } from "#app/lib/scan-reading/reading.ts";
 import { optionalQuantity, quantity } from "./quantity.ts";
 import { RULES } from "./ranges.ts";
 

@@ -41,6 +41,7 @@ const SUBJECTS: Record<string, string> = {
   StepTemplate: "step template",
   FlowTemplate: "flow template",
   Assessment: "assessment",
+  ImportProfile: "import profile",
   ScanFile: "scan file",
   Scan: "scan",
 };

@@ -3,7 +3,7 @@ import { fittedHeight, levelHeight } from "#app/engine/profile/fitted-height.ts"
 import { smallDeflection } from "#app/engine/profile/small-deflection.ts";
 import { siliconBiaxialModulus } from "#app/engine/silicon/biaxial-modulus.ts";
 import { bowFromCurvature, standardBow } from "#app/engine/stoney/bow.ts";
-import type { ReadProfile } from "#app/lib/profile-csv.ts";
+import type { ReadProfile } from "#app/lib/scan-reading/one-profile.ts";
 import type { ScanContribution, ScanResult } from "#app/schemas/scan-result.ts";
 import type { ScanValues } from "#app/schemas/scan.ts";
 

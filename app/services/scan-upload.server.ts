@@ -6,9 +6,9 @@ import { Scan } from "#app/db/entities/scan.ts";
 import { EngineInputError } from "#app/engine/errors.ts";
 import { ENGINE_VERSION } from "#app/engine/version.ts";
 import { excerpt } from "#app/lib/excerpt.ts";
-import { readProfile, type ReadProfile } from "#app/lib/profile-csv.ts";
 import { checkOnWafer, checkTogether } from "#app/lib/profile-on-wafer.ts";
-import { ProfileFileError } from "#app/lib/profile-text.ts";
+import { readOneProfile, type ReadProfile } from "#app/lib/scan-reading/one-profile.ts";
+import { ScanFileError } from "#app/lib/scan-reading/refusal.ts";
 import type { ScanResult } from "#app/schemas/scan-result.ts";
 import type { ScanValues } from "#app/schemas/scan.ts";
 import { inScope, type ActorScope } from "#app/server/scope.server.ts";
@@ -43,7 +43,7 @@ export async function uploadScan(scope: ActorScope, values: ScanValues, files: S
 
 function computeScan(values: ScanValues, files: ScanFiles): { result: ScanResult } | Refused {
   const read = (which: "before" | "after"): ReadProfile => {
-    const profile = readProfile(files[which].bytes, files[which].name, values);
+    const profile = readOneProfile(files[which].bytes, files[which].name, values);
     checkOnWafer(profile, excerpt(files[which].name, 80), values);
     return profile;
   };
@@ -52,14 +52,14 @@ function computeScan(values: ScanValues, files: ScanFiles): { result: ScanResult
     const before = read("before");
     reading = "after";
     if (digest(files.before.bytes) === digest(files.after.bytes))
-      throw new ProfileFileError(
+      throw new ScanFileError(
         `${excerpt(files.after.name, 80)} holds the same bytes as the file before the film. Choose the scan after it.`,
       );
     const after = read("after");
     checkTogether({ name: files.before.name, profile: before }, { name: files.after.name, profile: after }, values);
     return { result: scanResult(values, before, after) };
   } catch (error) {
-    if (error instanceof ProfileFileError) return { outcome: "refused", field: reading, reason: error.message };
+    if (error instanceof ScanFileError) return { outcome: "refused", field: reading, reason: error.message };
     if (error instanceof EngineInputError)
       return {
         outcome: "refused",

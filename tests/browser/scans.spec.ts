@@ -89,6 +89,24 @@ test.describe("a technician", () => {
     await expect(page.getByRole("heading", { level: 1, name: "Scans" })).toBeVisible();
   });
 
+  test("files as an instrument writes them: numbered rows, height before position, UTF-16, remarks around them", async ({
+    page,
+  }) => {
+    const asWritten = (path: string) => {
+      const [, ...rows] = readFileSync(path, "utf8").trimEnd().split("\n");
+      const body = rows.map((row, n) => [n + 1, ...row.split(",").reverse()].join("\t"));
+      const text = ["Recipe 12", "", "No\tHeight\tPosition", "\tµm\tmm", ...body, "End of scan", ""].join("\r\n");
+      return Buffer.from(`\uFEFF${text}`, "utf16le");
+    };
+    await fillForm(page, ownLabel());
+    await fileBefore(page).setInputFiles(csv("before.txt", asWritten(BEFORE)));
+    await fileAfter(page).setInputFiles(csv("after.txt", asWritten(AFTER)));
+    await readAndKeep(page);
+    await expect(page.getByRole("region", { name: "Answer" })).toContainText(/31\.\d+.±/);
+    await expect(page.getByText("381 of 381 rows read").first()).toBeVisible();
+    await expect(page.getByText("column 3 was read as the position and column 2 as the height").first()).toBeVisible();
+  });
+
   test("working and method stand one link away", async ({ page }) => {
     const label = ownLabel();
     await fillForm(page, label);

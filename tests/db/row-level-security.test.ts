@@ -26,6 +26,7 @@ const SITE_TABLES = [
   "site_limit",
   "step_template",
   "flow_template",
+  "import_profile",
 ];
 
 let engineer: ActorScope;

@@ -1,6 +1,7 @@
 /**
  * `npm run bench`: how fast the engine samples, against NumPy doing the same in the same run, how long a chart's sweep, a flow's
- * sampling, walk and assessment take, and how large the part is that runs in the browser. Prints a table; fails nothing, since times depend on the machine and what else it does.
+ * sampling, walk and assessment take, how fast a scan of a million rows is read, and how large the part is that runs in the
+ * browser. Prints a table; fails nothing, since times depend on the machine and what else it does.
  */
 import { assessFlow } from "../../engine/flow/assess.ts";
 import { walkFlow } from "../../engine/flow/walk.ts";
@@ -17,6 +18,7 @@ import { liveBundle } from "./bundle.mjs";
 import { inputsOf, stackOf, uncertaintiesOf } from "./cases.mjs";
 import { metalFlow } from "./flows.mjs";
 import { needNumpy, numpyLaminate } from "./numpy.mjs";
+import { scans } from "./scans.mjs";
 import { scatter, shortest, slope } from "./timing.mjs";
 
 const DRAWS = 2 ** 20;
@@ -226,4 +228,5 @@ compare();
 sweep();
 flow();
 walks();
+await scans();
 await size();

@@ -1,7 +1,7 @@
 import { spawnSync } from "node:child_process";
 import { fileURLToPath } from "node:url";
 
-const python = "/usr/bin/python3";
+export const python = "/usr/bin/python3";
 const installer = "/usr/bin/apt-get";
 
 /** One thread, whatever library NumPy was built with. */

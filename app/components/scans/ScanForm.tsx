@@ -7,7 +7,7 @@ import { LineField } from "#app/components/forms/LineField.tsx";
 import { QuantityField } from "#app/components/forms/QuantityField.tsx";
 import { SubmitButton } from "#app/components/forms/SubmitButton.tsx";
 import { useRecordForm } from "#app/components/forms/use-record-form.ts";
-import { DECIMAL_MARKS, LENGTH_UNITS } from "#app/lib/scan-file.ts";
+import { DECIMAL_MARKS, LENGTH_UNITS } from "#app/lib/scan-reading/reading.ts";
 import { FileField } from "./FileField.tsx";
 
 /** A scan as the text of its form; a file has none. */

@@ -20,7 +20,8 @@ interface Props {
 
 /** How one file was read, what of it could not be, and the file itself. */
 export function ScanReading({ which, file, reading, parameters }: Props) {
-  const { rows, used, columns, heading, delimiter, skipped, skippedInAll } = reading;
+  const { rows, used, columns, heading, delimiter, skipped, skippedInAll, averagedTo } = reading;
+  const [position, height] = reading.readColumns ?? [0, 1];
   const mm = (metres: number) => formatQuantity(metres, "length", { unit: "mm" });
   return (
     <section aria-labelledby={`file-${which}`}>
@@ -36,7 +37,9 @@ export function ScanReading({ which, file, reading, parameters }: Props) {
       <p className="mt-1 text-quiet">
         {`${used} of ${rows} rows read, ${mm(reading.from)} to ${mm(reading.to)}. ${DELIMITERS[delimiter] ? `Split at ${DELIMITERS[delimiter]}` : `Split at “${delimiter}”`}, decimal ${parameters.decimalMark}; position in ${parameters.positionUnit}, height in ${parameters.heightUnit}. `}
         {heading ? `Heading “${heading}”.` : "No heading."}
-        {columns > 2 && ` Of ${columns} columns the first two were read.`}
+        {(columns > 2 || position > height) &&
+          ` Of ${columns} columns, column ${position + 1} was read as the position and column ${height + 1} as the height.`}
+        {averagedTo !== undefined && ` The fit was given ${averagedTo} means of neighbouring points.`}
       </p>
       {skippedInAll > 0 && (
         <details className="mt-1">
@@ -71,7 +74,7 @@ export function ScanReading({ which, file, reading, parameters }: Props) {
           </div>
           {skippedInAll > skipped.length && (
             <p className="text-quiet">
-              The first {skipped.length} of {skippedInAll} are listed.
+              {skipped.length} of {skippedInAll} are listed, up to five of each cause.
             </p>
           )}
         </details>

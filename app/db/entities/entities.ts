@@ -11,6 +11,7 @@ import { FlowRevision } from "./flow-revision.ts";
 import { FlowStep } from "./flow-step.ts";
 import { FlowStepFilm } from "./flow-step-film.ts";
 import { FlowTemplate } from "./flow-template.ts";
+import { ImportProfile } from "./import-profile.ts";
 import { Membership } from "./membership.ts";
 import { Person } from "./person.ts";
 import { Program } from "./program.ts";
@@ -46,6 +47,7 @@ export const entities = [
   StepTemplate,
   FlowTemplate,
   Assessment,
+  ImportProfile,
   ScanFile,
   Scan,
   AuditEvent,

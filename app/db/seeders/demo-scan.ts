@@ -1,7 +1,7 @@
 import { createHash, randomUUID } from "node:crypto";
 import type { EntityManager } from "@mikro-orm/postgresql";
 import { ENGINE_VERSION } from "#app/engine/version.ts";
-import { readProfile } from "#app/lib/profile-csv.ts";
+import { readOneProfile } from "#app/lib/scan-reading/one-profile.ts";
 import { scanResult } from "#app/services/scan-result-of.ts";
 import { Film } from "../entities/film.ts";
 import type { Person } from "../entities/person.ts";
@@ -24,7 +24,7 @@ export async function addDemoScan(em: EntityManager, person: Person): Promise<vo
     const bytes = Buffer.from(profileCsv(monitorProfile(which, { seed: SEED })));
     const hash = createHash("sha256").update(bytes).digest("hex");
     const file = em.create(ScanFile, { id: randomUUID(), name, hash, size: bytes.length, bytes, ...about });
-    return { file, profile: readProfile(bytes, name, MONITOR_PARAMETERS) };
+    return { file, profile: readOneProfile(bytes, name, MONITOR_PARAMETERS) };
   };
   const [before, after] = [scanned("before"), scanned("after")];
   const values = { program: program.id, label: LABEL, film: film.id, ...MONITOR_PARAMETERS };

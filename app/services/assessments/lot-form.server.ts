@@ -1,6 +1,7 @@
 import { lotSchema } from "#app/schemas/lot-form.ts";
 import { fileSize } from "#app/lib/file-size.ts";
-import { ProfileFileError, profileText } from "#app/lib/profile-text.ts";
+import { fileText } from "#app/lib/scan-reading/decoding.ts";
+import { ScanFileError } from "#app/lib/scan-reading/refusal.ts";
 import { parseForm } from "#app/server/parse-form.server.ts";
 import type { ActorScope } from "#app/server/scope.server.ts";
 import { readUpload, type Upload } from "#app/server/upload.server.ts";
@@ -65,10 +66,10 @@ function takeFile({ formData, files, tooLarge }: Upload<"file">): string | null 
   if (!files.file) return null;
   const { name, bytes } = files.file;
   try {
-    formData.set("wafers", profileText(bytes, name));
+    formData.set("wafers", fileText(bytes, name));
     return null;
   } catch (error) {
-    if (!(error instanceof ProfileFileError)) throw error;
+    if (!(error instanceof ScanFileError)) throw error;
     return `${name} is empty, or no text file. Export slot, bow and thickness as CSV.`;
   }
 }

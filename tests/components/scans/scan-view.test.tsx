@@ -2,7 +2,7 @@ import { createRoutesStub } from "react-router";
 import { describe, expect, it } from "vitest";
 import { ScanView } from "#app/components/scans/ScanView.tsx";
 import { stoneyStressWorking } from "#app/engine/stoney/working.ts";
-import { readProfile } from "#app/lib/profile-csv.ts";
+import { readOneProfile } from "#app/lib/scan-reading/one-profile.ts";
 import { shownWorking } from "#app/lib/shown-working.ts";
 import type { ScanDetail } from "#app/schemas/scan-view.ts";
 import { scanResult } from "#app/services/scan-result-of.ts";
@@ -14,7 +14,7 @@ const PARAMETERS = { ...MONITOR_PARAMETERS, filmThicknessTolerance: null };
 
 function detail(tail: string): ScanDetail {
   const read = (which: "before" | "after") =>
-    readProfile(new TextEncoder().encode(profileCsv(monitorProfile(which)) + tail), `${which}.csv`, PARAMETERS);
+    readOneProfile(new TextEncoder().encode(profileCsv(monitorProfile(which)) + tail), `${which}.csv`, PARAMETERS);
   const values = { program: "", label: "M-0388", film: null, ...PARAMETERS };
   const file = (name: string) => ({ id: `id-${name}`, name, size: 5342, hash: "0".repeat(64) });
   const result = scanResult(values, read("before"), read("after"));

@@ -1,5 +1,5 @@
 import { describe, expect, it } from "vitest";
-import type { ReadProfile } from "#app/lib/profile-csv.ts";
+import type { ReadProfile } from "#app/lib/scan-reading/one-profile.ts";
 import { checkOnWafer, checkTogether } from "#app/lib/profile-on-wafer.ts";
 
 const WAFER = { diameter: 0.2, edgeExclusion: 5e-3 };

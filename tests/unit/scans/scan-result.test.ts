@@ -4,7 +4,7 @@
  *   σ, u(σ)   film stress and its standard uncertainty         Pa
  */
 import { describe, expect, it } from "vitest";
-import { readProfile } from "#app/lib/profile-csv.ts";
+import { readOneProfile } from "#app/lib/scan-reading/one-profile.ts";
 import type { ScanValues } from "#app/schemas/scan.ts";
 import { scanResult } from "#app/services/scan-result-of.ts";
 import {
@@ -24,7 +24,7 @@ const VALUES: ScanValues = {
 
 type Points = { x: number; z: number }[];
 const profile = (points: Points) =>
-  readProfile(new TextEncoder().encode(profileCsv(points, { heightPerMetre: 1e6 })), "scan.csv", VALUES);
+  readOneProfile(new TextEncoder().encode(profileCsv(points, { heightPerMetre: 1e6 })), "scan.csv", VALUES);
 const resultOf = (before: Points, after: Points, values: Partial<ScanValues> = {}) =>
   scanResult({ ...VALUES, ...values }, profile(before), profile(after));
 const measured = (values: Partial<ScanValues> = {}) =>

@@ -1,0 +1,89 @@
+import type { ProfilePoint } from "#app/engine/profile/points.ts";
+import { excerpt } from "#app/lib/excerpt.ts";
+import type { ImportProfile } from "#app/schemas/import-profile.ts";
+import type { FileReading, SkippedRow } from "#app/schemas/scan-result.ts";
+import { profilePoints } from "./profile-points.ts";
+import type { FileProfile, ProfileFile } from "./profile-rows.ts";
+import type { DecimalMark, LengthUnit, Reading } from "./reading.ts";
+import { ScanFileError } from "./refusal.ts";
+import { readScanFile, type ScanRead } from "./scan-reader.ts";
+
+/** The only profile of a file: its points for the engine, and how the file was understood. */
+export interface ReadProfile {
+  points: ProfilePoint[];
+  reading: FileReading;
+}
+
+/** What a person has stated of a file of one profile. */
+export interface StatedFormat {
+  positionUnit: LengthUnit;
+  heightUnit: LengthUnit;
+  decimalMark: DecimalMark;
+}
+
+const LONGEST_HEAD = 80;
+
+/**
+ * Reads a file that holds one profile, position and height, in stated units and with a stated decimal mark. Heads tell the two
+ * columns; without heads, and where their numbers do not tell them either, they are the first two.
+ * @throws ScanFileError with a sentence that says what is wrong, where, and what to do
+ */
+export function readOneProfile(bytes: Uint8Array, fileName: string, stated: StatedFormat): ReadProfile {
+  const name = excerpt(fileName, LONGEST_HEAD);
+  const { positionUnit, heightUnit, decimalMark } = stated;
+  const profile: ImportProfile = { decimalMark, units: { position: positionUnit, height: heightUnit } };
+  let read = readScanFile(bytes, fileName, profile);
+  if (isOnlyUnheaded(read)) {
+    const columns: ImportProfile["columns"] = [
+      { index: 0, role: "position" },
+      { index: 1, role: "height" },
+    ];
+    read = readScanFile(bytes, fileName, { ...profile, columns });
+  }
+  const { kind, ambiguities } = read.reading;
+  if (kind !== "profiles")
+    throw new ScanFileError(`${name} is a ${kind}, not a profile. Choose the scan, position and height in a row.`);
+  if (read.outcome === "question" || read.content.kind !== "profiles") {
+    const open = ambiguities.find(({ blocks }) => blocks);
+    throw new ScanFileError(`${name}: ${open?.sentence ?? "its columns are not known."}`);
+  }
+  const [only, ...others] = read.content.profiles;
+  if (!only || others.length > 0)
+    throw new ScanFileError(
+      `${name} holds ${read.content.profiles.length} profiles: ${read.content.profiles.map((each) => `“${excerpt(each.name, 30)}”`).join(", ")}. Export the one that is meant to a file of its own.`,
+    );
+  const points = profilePoints(only);
+  return { points, reading: fileReading(read.reading, read.content, only, points.length) };
+}
+
+/** Nothing but the columns is open, and no head says anything of them. */
+function isOnlyUnheaded({ outcome, reading }: ScanRead): boolean {
+  const open = reading.ambiguities.filter(({ blocks }) => blocks);
+  return (
+    outcome === "question" &&
+    open.every(({ what }) => what === "columns") &&
+    reading.columns.every(({ role }) => role === null)
+  );
+}
+
+function fileReading(reading: Reading, content: ProfileFile, profile: FileProfile, points: number): FileReading {
+  const { position, height, x, from, to } = profile;
+  const heads = [position, height].map((column) => reading.columns[column]?.heading ?? "");
+  const skipped = content.faults
+    .flatMap(({ places }) => places)
+    .map(({ row, column, text }): SkippedRow => ({ row, column: column === height ? "height" : "position", text }))
+    .sort((one, other) => one.row - other.row);
+  return {
+    rows: content.rows,
+    used: x.length,
+    columns: reading.columns.length,
+    readColumns: [position, height],
+    heading: heads.every((head) => head === "") ? null : excerpt(heads.join(", "), LONGEST_HEAD),
+    delimiter: reading.delimiter,
+    from,
+    to,
+    skipped,
+    skippedInAll: content.faulty,
+    ...(points < x.length ? { averagedTo: points } : {}),
+  };
+}
