@@ -93,6 +93,19 @@ function walks() {
   );
 }
 
+/** A flow as long as one may be: cost goes with steps as long as the stack does not grow. */
+function longFlow() {
+  const limits = defaultLimits();
+  const sizes = [50, 100, 200, 300];
+  const times = sizes.map((steps) => {
+    const long = metalFlow({ steps, films: 11, together: 1 });
+    return shortest(2, () => assessFlow(long, limits));
+  });
+  console.log(
+    `Assessment of 300 steps, 12 layers, with its uncertainties: ${times.at(-1).toFixed(2)} s; growth of time with steps ${slope(sizes, times).toFixed(2)} (1 is linear)`,
+  );
+}
+
 async function size() {
   const { gzip, plain, packages } = await liveBundle();
   const kB = (bytes) => `${(bytes / 1e3).toFixed(1)} kB`;
@@ -105,4 +118,5 @@ compareWithNumpy();
 sweep();
 flow();
 walks();
+longFlow();
 await size();
