@@ -7,137 +7,16 @@ import { assessFlow } from "../../engine/flow/assess.ts";
 import { walkFlow } from "../../engine/flow/walk.ts";
 import { defaultLimits } from "../../engine/rules/limits.ts";
 import { thicknessSweep } from "../../engine/stack/thickness-sweep.ts";
-import { BLOCK, plainDrawing } from "../../engine/uncertainty/drawing.ts";
 import { laminateModel } from "../../engine/uncertainty/laminate-model.ts";
-import { seededState } from "../../engine/uncertainty/random/generator.ts";
 import { stepsSampling } from "../../engine/uncertainty/sample-steps.ts";
-import { sampleUncertainty, sampling } from "../../engine/uncertainty/sample-uncertainty.ts";
+import { sampleUncertainty } from "../../engine/uncertainty/sample-uncertainty.ts";
 import { shapeCurve } from "../../engine/uncertainty/shape-curve.ts";
-import { sourcesOf } from "../../engine/uncertainty/sources.ts";
 import { liveBundle } from "./bundle.mjs";
-import { inputsOf, stackOf, uncertaintiesOf } from "./cases.mjs";
+import { inputsOf, stackOf } from "./cases.mjs";
 import { metalFlow } from "./flows.mjs";
-import { needNumpy, numpyLaminate } from "./numpy.mjs";
+import { compareWithNumpy } from "./against-numpy.mjs";
 import { scans } from "./scans.mjs";
-import { scatter, shortest, slope } from "./timing.mjs";
-
-const DRAWS = 2 ** 20;
-const ROUNDS = 3;
-
-const layers = stackOf(10);
-const inputs = inputsOf(layers);
-const { curvature } = laminateModel(layers);
-
-/** Nanoseconds per draw of drawing, evaluating and keeping, and of evaluating alone. */
-function ownTimes() {
-  const draws = DRAWS / 4;
-  const all = shortest(3, () => {
-    const run = sampling({ model: curvature, inputs, draws, seed: 1 });
-    // Up to the last draw: the summary comes with the next call and is timed elsewhere.
-    for (let step = run.next(); !step.done && step.value.done < draws; step = run.next());
-  });
-  const block = new Float64Array(BLOCK * inputs.length);
-  const out = new Float64Array(BLOCK);
-  plainDrawing(sourcesOf(inputs, []), seededState(1))(block, BLOCK);
-  const blocks = 2000;
-  const arithmetic = shortest(10, () => {
-    for (let n = 0; n < blocks; n += 1) curvature.evaluate(block, BLOCK, out);
-  });
-  return { nsPerDraw: (1e9 * all) / draws, nsArithmetic: (1e9 * arithmetic) / (blocks * BLOCK) };
-}
-
-const sample = (method, draws, seed) => {
-  const found = sampleUncertainty({ model: curvature, inputs, draws, seed, method });
-  return { mean: found.mean, high: found.quantile(0.95) };
-};
-
-/** What a method reaches with so many draws: standard errors from the scatter of runs with seeds of their own, and time. */
-function reach(method, draws) {
-  const runs = Array.from({ length: 24 }, (_, seed) => sample(method, draws, 100 + seed));
-  return {
-    draws,
-    errorOfMean: scatter(runs.map(({ mean }) => mean)),
-    errorOfHigh: scatter(runs.map(({ high }) => high)),
-    seconds: shortest(5, () => sample(method, draws, 1)),
-  };
-}
-
-/** Fewest draws of a method, in powers of two, that are as good as NumPy's in both. */
-function asGoodAs(method, { errorOfMean, errorOfHigh }) {
-  let found = reach(method, 2 ** 12);
-  while ((found.errorOfMean > errorOfMean || found.errorOfHigh > errorOfHigh) && found.draws < DRAWS)
-    found = reach(method, found.draws * 2);
-  return found;
-}
-
-function compare() {
-  const missing = needNumpy();
-  if (missing) {
-    console.log(missing);
-    const own = ownTimes();
-    console.log(`Draws: ${own.nsPerDraw.toFixed(0)} ns each, arithmetic ${own.nsArithmetic.toFixed(0)} ns.`);
-    return;
-  }
-  const u = uncertaintiesOf(layers);
-  const given = {
-    thickness: layers.map(({ thickness }) => thickness),
-    modulus: layers.map(({ youngsModulus }) => youngsModulus),
-    stress: layers.map(({ stress }) => stress),
-    poisson: layers.map(({ poissonsRatio }) => poissonsRatio),
-    u_thickness: u.thickness,
-    u_modulus: u.modulus,
-    u_stress: u.stress,
-    draws: DRAWS,
-    chunks: [1000, 2000, 4000, 8000, 16000],
-  };
-  // In turn, so that a busy moment of the machine does not fall on one side alone.
-  const rounds = Array.from({ length: ROUNDS }, () => ({ own: ownTimes(), numpy: numpyLaminate(given) }));
-  const least = (pick) => Math.min(...rounds.map(pick));
-  const numpy = rounds[0].numpy;
-  const total = { own: least(({ own }) => own.nsPerDraw), numpy: least((round) => round.numpy.nsPerDraw) };
-  const sums = { own: least(({ own }) => own.nsArithmetic), numpy: least((round) => round.numpy.nsArithmetic) };
-  const seconds = least((round) => round.numpy.seconds);
-  const row = (name, own, other, ratio, wanted) =>
-    console.log([name.padEnd(46), own, other, ratio, wanted].join(" | "));
-  console.log(
-    `Processor time. Laminate of 10 layers, 30 normal inputs, one thread; NumPy ${numpy.version}, ${numpy.layout}, chunks of ${numpy.chunk}`,
-  );
-  row("", "engine     ", "NumPy      ", "ratio ", "wanted");
-  const rate = (ns) => `${(1e3 / ns).toFixed(2)} M/s`.padEnd(11);
-  const times = (ratio) => ratio.toFixed(2).padEnd(6);
-  row(
-    "draws a second, sampling included",
-    rate(total.own),
-    rate(total.numpy),
-    times(total.numpy / total.own),
-    "1 or more",
-  );
-  row("draws a second, arithmetic alone", rate(sums.own), rate(sums.numpy), times(sums.numpy / sums.own), "2 or more");
-  const ms = (value) => `${(1e3 * value).toFixed(1)} ms`.padEnd(11);
-  row(
-    `mean and 95 % point of ${DRAWS} plain draws`,
-    ms(shortest(3, () => sample("plain", DRAWS, 1))),
-    ms(seconds),
-    "",
-    "",
-  );
-  const check = sample("lattice", 2 ** 18, 1);
-  const off = (own, other, error) => `${(Math.abs(own - other) / error).toFixed(1)}`;
-  console.log(
-    `    the two agree: mean ${off(check.mean, numpy.mean, numpy.errorOfMean)}, 95 % point ${off(check.high, numpy.high, numpy.errorOfHigh)} standard errors apart`,
-  );
-  for (const method of ["control variate", "lattice"]) {
-    const found = asGoodAs(method, numpy);
-    const reached = found.errorOfMean <= numpy.errorOfMean && found.errorOfHigh <= numpy.errorOfHigh;
-    const name = reached
-      ? `as good by ${method}, ${found.draws} draws`
-      : `${method} not as good at ${found.draws} draws`;
-    row(name, ms(found.seconds), ms(seconds), times(found.seconds / seconds), "0.2 or less");
-    console.log(
-      `    standard error of mean ${found.errorOfMean.toExponential(1)} (${numpy.errorOfMean.toExponential(1)}), of 95 % point ${found.errorOfHigh.toExponential(1)} (${numpy.errorOfHigh.toExponential(1)})`,
-    );
-  }
-}
+import { shortest, slope } from "./timing.mjs";
 
 function sweep() {
   const films = [1, 2, 3, 4, 5, 6].map((n) => ({
@@ -195,9 +74,9 @@ function flow() {
     sampleUncertainty({ model: laminateModel(stack).curvature, inputs: inputsOf(stack), draws: evaluations, seed: 1 });
   });
   const stepsSlope = growth([10, 20, 40, 80], (size) => sampleFlow(size, 12, 10_000));
-  const drawsSlope = growth([20_000, 40_000, 80_000, 160_000], (draws) =>
-    sampleUncertainty({ model: curvature, inputs, draws, seed: 1 }),
-  );
+  const stack = stackOf(10);
+  const drawn = { model: laminateModel(stack).curvature, inputs: inputsOf(stack), seed: 1 };
+  const drawsSlope = growth([20_000, 40_000, 80_000, 160_000], (draws) => sampleUncertainty({ ...drawn, draws }));
   console.log(`Growth of time (1 is linear): layers ${layersSlope}, steps ${stepsSlope}, draws ${drawsSlope}`);
 }
 
@@ -216,6 +95,19 @@ function walks() {
   );
 }
 
+/** A flow as long as one may be: cost goes with steps as long as the stack does not grow. */
+function longFlow() {
+  const limits = defaultLimits();
+  const sizes = [50, 100, 200, 300];
+  const times = sizes.map((steps) => {
+    const long = metalFlow({ steps, films: 11, together: 1 });
+    return shortest(2, () => assessFlow(long, limits));
+  });
+  console.log(
+    `Assessment of 300 steps, 12 layers, with its uncertainties: ${times.at(-1).toFixed(2)} s; growth of time with steps ${slope(sizes, times).toFixed(2)} (1 is linear)`,
+  );
+}
+
 async function size() {
   const { gzip, plain, packages } = await liveBundle();
   const kB = (bytes) => `${(bytes / 1e3).toFixed(1)} kB`;
@@ -224,9 +116,10 @@ async function size() {
   );
 }
 
-compare();
+compareWithNumpy();
 sweep();
 flow();
 walks();
+longFlow();
 await scans();
 await size();

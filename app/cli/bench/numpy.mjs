@@ -29,11 +29,11 @@ export function needNumpy() {
 }
 
 /**
- * The same laminate in NumPy.
+ * The same laminate in NumPy: processor times by layout and chunk size, and what all draws give if a summary is asked for.
  *
  * @param {object} given
- * @returns {{ nsPerDraw: number, nsArithmetic: number, seconds: number, mean: number, high: number, deviation: number,
- *   errorOfMean: number, errorOfHigh: number, layout: string, chunk: number, version: string }}
+ * @returns {{ found: { layout: string, chunk: number, nsPerDraw: number, nsArithmetic: number }[], version: string,
+ *   seconds?: number, mean?: number, high?: number, errorOfMean?: number, errorOfHigh?: number }}
  */
 export function numpyLaminate(given) {
   const program = fileURLToPath(new URL("laminate.py", import.meta.url));

@@ -21,6 +21,15 @@ export function shortest(runs, work) {
 }
 
 /**
+ * The one in the middle.
+ *
+ * @param {number[]} values an odd number of them
+ */
+export function median(values) {
+  return values.toSorted((a, b) => a - b)[values.length >> 1];
+}
+
+/**
  * Slope of time against size on logarithmic scales, by least squares: 1 is linear.
  *
  * @param {number[]} sizes

@@ -48,14 +48,22 @@ export function worstOutcome(findings: Finding[]): Outcome {
   );
 }
 
-/** Support that a step needs: by the thickness rule, raised by a sag that no free wafer may have. */
+/** Support that a step needs: by the thickness rule, raised by a sag, among its findings, that no free wafer may have. */
 function supportNeeded(context: RuleContext, state: StepState, findings: Finding[]): SupportClass | null {
   const required = requiredAt(context, state)?.support ?? null;
-  const sags = findings.some(
-    ({ rule, step, outcome }) => rule === 5 && step === state.number && outcome === "needs support",
-  );
+  const sags = findings.some(({ rule, outcome }) => rule === 5 && outcome === "needs support");
   if (!sags || required === null) return required;
   return supportRank(required) < supportRank("tape or ring") ? "tape or ring" : required;
+}
+
+function byStep(findings: Finding[]): Map<number, Finding[]> {
+  const groups = new Map<number, Finding[]>();
+  for (const finding of findings) {
+    const group = groups.get(finding.step);
+    if (group) group.push(finding);
+    else groups.set(finding.step, [finding]);
+  }
+  return groups;
 }
 
 /**
@@ -70,11 +78,12 @@ export function assessFlow(flow: FlowInput, limits: SiteLimits): FlowAssessment 
   const outcome = worstOutcome(findings);
   const first = findings.find((finding) => finding.outcome === outcome);
   const inputs = statedInputs(flow);
+  const ofStep = byStep(findings);
   return {
     steps: steps.map((state, index) => ({
       state,
-      required: supportNeeded(context, state, findings),
-      outcome: worstOutcome(findings.filter(({ step }) => step === state.number)),
+      required: supportNeeded(context, state, ofStep.get(state.number) ?? []),
+      outcome: worstOutcome(ofStep.get(state.number) ?? []),
       uncertainty: { atRoom: uncertainty[index]?.atRoom ?? null, atPeak: uncertainty[index]?.atPeak ?? null },
       budget: uncertainty[index]?.budget ?? [],
     })),

@@ -1,4 +1,5 @@
 import { flowStrains, type StressBounds } from "../laminate/bounded-stress.ts";
+import { newColumn } from "../laminate/column.ts";
 import type { Layer } from "../laminate/layer.ts";
 import { letFlow, placeLayers, type PlacedLayers } from "../laminate/placed-layers.ts";
 import { balanceLayers, type LaminateBalance } from "../laminate/solve-laminate.ts";
@@ -77,7 +78,7 @@ function boundsOf(
   films: LayerStack["films"],
   options: { temperature: number; metalHistory: boolean },
 ): StressBounds | null {
-  const bounds = { low: new Float64Array(films.length), high: new Float64Array(films.length) };
+  const bounds = { low: newColumn(films.length), high: newColumn(films.length) };
   let some = false;
   bounds.low.fill(-Infinity);
   bounds.high.fill(Infinity);

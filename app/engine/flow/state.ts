@@ -1,3 +1,4 @@
+import type { PlaneTensor } from "../directional/plane-stiffness.ts";
 import { EngineInputError } from "../errors.ts";
 import type { Measured } from "../measured.ts";
 import type { Orientation } from "../silicon/orientation.ts";
@@ -225,8 +226,14 @@ function sameBond(a: BondState | null, b: BondState | null): boolean {
     a?.thickness === b?.thickness &&
     a?.bondTemperature === b?.bondTemperature &&
     a?.rest?.carrierStrain === b?.rest?.carrierStrain &&
-    a?.rest?.adhesiveStrain === b?.rest?.adhesiveStrain
+    a?.rest?.adhesiveStrain === b?.rest?.adhesiveStrain &&
+    sameTensor(a?.rest?.unequal?.carrier, b?.rest?.unequal?.carrier) &&
+    sameTensor(a?.rest?.unequal?.adhesive, b?.rest?.unequal?.adhesive)
   );
+}
+
+function sameTensor(a: PlaneTensor | undefined, b: PlaneTensor | undefined): boolean {
+  return a?.x === b?.x && a?.y === b?.y && a?.xy === b?.xy;
 }
 
 function sameIncoming(a: Incoming | null, b: Incoming | null): boolean {

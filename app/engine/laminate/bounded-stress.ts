@@ -1,3 +1,4 @@
+import { newColumn } from "./column.ts";
 import type { PlacedLayers } from "./placed-layers.ts";
 import type { LaminateBalance, SlidingPlate } from "./solve-laminate.ts";
 
@@ -59,7 +60,7 @@ export function flowStrains(
     }
     strain = stopShort(problem, strain, target);
   }
-  const flow = new Float64Array(layers.count);
+  const flow = newColumn(layers.count);
   for (let n = 0; n < layers.count; n += 1) {
     const trial = trialStress(problem, n, strain);
     flow[n] = (trial - clip(bounds, n, trial)) / (layers.biaxialModulus[n] ?? 1);

@@ -1,4 +1,5 @@
 import { EngineInputError } from "../errors.ts";
+import { newColumn } from "./column.ts";
 import { freeStrain, type NamedLayer } from "./free-strain.ts";
 
 /**
@@ -45,23 +46,17 @@ export function placeLayers(layersBottomToTop: readonly NamedLayer[], temperatur
   return placed;
 }
 
-/** Columns of zeros in one piece of memory: pieces of their own would cost more than what is put into them. */
 function emptyColumns(count: number): PlacedLayers {
-  const all = new ArrayBuffer(6 * count * Float64Array.BYTES_PER_ELEMENT);
   return {
     count,
-    thickness: column(all, 0, count),
-    biaxialModulus: column(all, 1, count),
-    coveredModulus: column(all, 2, count),
-    centre: column(all, 3, count),
-    freeStrain: column(all, 4, count),
-    flowed: column(all, 5, count),
+    thickness: newColumn(count),
+    biaxialModulus: newColumn(count),
+    coveredModulus: newColumn(count),
+    centre: newColumn(count),
+    freeStrain: newColumn(count),
+    flowed: newColumn(count),
     total: 0,
   };
-}
-
-function column(all: ArrayBuffer, place: number, count: number): Float64Array {
-  return new Float64Array(all, place * count * Float64Array.BYTES_PER_ELEMENT, count);
 }
 
 /** The layer whose flat state is the zero of strain: the first that expands as silicon, else the thickest. */

@@ -3,11 +3,13 @@ import type { NamedLayer } from "./free-strain.ts";
 import { checkLayer, ROOM_TEMPERATURE, type Layer } from "./layer.ts";
 import {
   bendingStiffnessOf,
-  LAMINATE_SUMS,
-  laminateSums,
-  meanStrainOf,
+  bendStacks,
+  curvatureOf,
+  forceOf,
+  LAYER_VALUES,
+  MODULUS_FACTORS,
+  MOST_LAYERS,
   neutralPlaneOf,
-  strainPerHeightOf,
   stretchingOf,
 } from "./laminate-sums.ts";
 import { placeLayers, type PlacedLayers } from "./placed-layers.ts";
@@ -122,44 +124,35 @@ export function balanceLayers(layers: PlacedLayers, slidingOn?: SlidingPlate): L
  */
 function bend(layers: PlacedLayers) {
   const { count, total } = layers;
-  if (scratch.thickness.length < count) scratch = columns(2 * count);
-  const { thickness, modulus, sums } = scratch;
-  for (let n = 0; n < count; n += 1) {
-    thickness[n] = layers.thickness[n] ?? 0;
-    modulus[n] = layers.coveredModulus[n] ?? 0;
+  if (count > MOST_LAYERS) {
+    throw new EngineInputError("layers", `${count} are given`, `at most ${MOST_LAYERS}`);
   }
-  sumAbout(layers, -total / 2, 0);
-  const stretching = stretchingOf(sums);
+  MODULUS_FACTORS.fill(1, 0, count);
+  for (let n = 0; n < count; n += 1) {
+    LAYER_VALUES[n] = layers.thickness[n] ?? 0;
+    LAYER_VALUES[count + n] = layers.coveredModulus[n] ?? 0;
+  }
+  bendAbout(layers, -total / 2, 0);
+  const stretching = stretchingOf(0);
   if (!(stretching > 0)) {
     throw new EngineInputError("layers", "no layer covers any area, so the stack has no stiffness");
   }
-  const neutralPlane = neutralPlaneOf(sums);
-  const meanStrain = meanStrainOf(sums);
-  sumAbout(layers, -total / 2 - neutralPlane, meanStrain);
+  const neutralPlane = neutralPlaneOf(0);
+  const meanStrain = -forceOf(0) / stretching;
+  bendAbout(layers, -total / 2 - neutralPlane, meanStrain);
   return {
     stretching,
     neutralPlane,
     meanStrain,
-    bendingStiffness: bendingStiffnessOf(sums),
-    strainPerHeight: strainPerHeightOf(sums),
+    bendingStiffness: bendingStiffnessOf(0),
+    strainPerHeight: -curvatureOf(0),
   };
 }
 
-/** Sums over the stack in `scratch`, its lowest face at a height `bottom`, free strains taken over `strain`. */
-function sumAbout({ count, freeStrain }: PlacedLayers, bottom: number, strain: number): void {
-  const { thickness, modulus, pressure, sums } = scratch;
-  for (let n = 0; n < count; n += 1) pressure[n] = (modulus[n] ?? 0) * ((freeStrain[n] ?? 0) - strain);
-  laminateSums(count, thickness, 0, modulus, pressure, bottom, sums);
-}
-
-/** Columns that `bend` fills anew each time: a flow solves tens of thousands of stacks, and new ones would cost more than the sums. */
-let scratch = columns(64);
-
-function columns(size: number) {
-  return {
-    thickness: new Float64Array(size),
-    modulus: new Float64Array(size),
-    pressure: new Float64Array(size),
-    sums: new Float64Array(LAMINATE_SUMS),
-  };
+/** Bends the stack in `LAYER_VALUES`, its lowest face at a height `bottom`, free strains taken over `strain`. */
+function bendAbout({ count, coveredModulus, freeStrain }: PlacedLayers, bottom: number, strain: number): void {
+  for (let n = 0; n < count; n += 1) {
+    LAYER_VALUES[2 * count + n] = -(coveredModulus[n] ?? 0) * ((freeStrain[n] ?? 0) - strain);
+  }
+  bendStacks(1, count, bottom);
 }

@@ -59,7 +59,16 @@ export interface FreeWaferShape {
 }
 
 /** The bow of small-deflection theory counts as right while it is within this share of the nonlinear one. */
-export const LINEAR_WITHIN = 0.01;
+const LINEAR_WITHIN = 0.01;
+
+/**
+ * How a free wafer bends: by its load over the one at which it rolls, its largest bow, and how far the bow of small-deflection
+ * theory lies off, in the same unit.
+ */
+export function shapeRegime(stabilityRatio: number, bow: number, off: number): ShapeRegime {
+  if (stabilityRatio > 1) return "curled";
+  return off <= LINEAR_WITHIN * bow ? "linear" : "nonlinear";
+}
 
 /**
  * Shape that a free wafer takes, gravity left out, under the stress that would give it `linearCurvature` by small-deflection
@@ -176,10 +185,9 @@ function checkCurvature(linear: FreeWaferShapeInput["linearCurvature"]): { x: nu
 }
 
 function regimeOf(load: CurvaturePair, bow: CurvaturePair, stabilityRatio: number): ShapeRegime {
-  if (stabilityRatio > 1) return "curled";
   const largest = Math.max(Math.abs(alongX(bow)), Math.abs(alongY(bow)));
   const off = Math.max(Math.abs(alongX(load) - alongX(bow)), Math.abs(alongY(load) - alongY(bow)));
-  return off <= LINEAR_WITHIN * largest ? "linear" : "nonlinear";
+  return shapeRegime(stabilityRatio, largest, off);
 }
 
 function bowsOf(bow: CurvaturePair, sagitta: (curvature: number) => number) {

@@ -1,7 +1,7 @@
 import { EngineInputError } from "../errors.ts";
 import { ROOM_TEMPERATURE } from "../laminate/layer.ts";
 import { criticalLinearCurvature } from "../plate/critical-load.ts";
-import { LINEAR_WITHIN } from "../plate/free-wafer-shape.ts";
+import { shapeRegime } from "../plate/free-wafer-shape.ts";
 import { bowFromCurvature } from "../stoney/bow.ts";
 import { laminateInputValues, laminateModel } from "../uncertainty/laminate-model.ts";
 import { shapeCurve, type ShapeCurve } from "../uncertainty/shape-curve.ts";
@@ -76,13 +76,12 @@ function siliconCurve({ radius, youngsModulus, poissonsRatio, crystal }: StackDi
   return curve;
 }
 
-/** The regime as `freeWaferShape` has it. */
+/** The regime of a shape read from the curve. */
 function regimeOnCurve(curve: ShapeCurve, disc: StackDisc, curvature: number, thickness: number): ShapeRegime {
   const onset = criticalLinearCurvature({ ...disc, thickness });
-  if (Math.abs(curvature) > onset) return "curled";
   const sagitta = Math.abs(curve.sagitta(curvature, thickness));
   const flat = Math.abs(bowFromCurvature({ curvature, radius: disc.radius }));
-  return flat - sagitta <= LINEAR_WITHIN * sagitta ? "linear" : "nonlinear";
+  return shapeRegime(Math.abs(curvature) / onset, sagitta, flat - sagitta);
 }
 
 const THINNEST = 1e-6;

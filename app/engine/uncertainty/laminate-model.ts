@@ -3,9 +3,12 @@ import { requireTemperature } from "../inputs.ts";
 import { freeStrain, type NamedLayer } from "../laminate/free-strain.ts";
 import {
   bendingStiffnessOf,
-  LAMINATE_SUMS,
-  laminateSums,
-  strainPerHeightOf,
+  bendStacks,
+  curvatureOf,
+  LAYER_VALUES,
+  MODULUS_FACTORS,
+  MOST_STACKS,
+  stacksThatFit,
   stretchingOf,
 } from "../laminate/laminate-sums.ts";
 import { checkLayer, ROOM_TEMPERATURE, type Layer } from "../laminate/layer.ts";
@@ -26,7 +29,7 @@ export interface LaminateModel {
  * layers: the inputs are all thicknesses from the bottom up, then all moduli, then all stresses (`laminateInputNames`). What else
  * the layers state, Poisson's ratio, coverage, expansion, temperatures and plastic strain, stays as it is.
  *
- * It runs the sums of `solveLaminate` (`laminateSums`) about the neutral plane and mean strain of the layers as given, which loses
+ * It runs the sums of `solveLaminate` (`bendStacks`) about the neutral plane and mean strain of the layers as given, which loses
  * no digits while the draws stay near them: curvatures agree with `solveLaminate` to 1e-14 for draws some 10 % off.
  * Inputs are not checked one by one. A draw without stiffness gives no finite curvature, which sampling refuses.
  * @throws EngineInputError as `solveLaminate` does, for the layers as given
@@ -46,44 +49,71 @@ export function laminateModel(layersBottomToTop: readonly Layer[], o: { temperat
     return (coverage[n] ?? 0) / (1 - poissonsRatio);
   });
   const meanStrain = solved.midplaneStrain - solved.curvature * solved.neutralPlane;
-  /** free strain without the stress's part, over the mean strain */
-  const strain = Float64Array.from(
-    named,
-    ({ layer, field }) => freeStrain({ layer: { ...layer, stress: 0 }, field }, base, temperature) - meanStrain,
+  const free = named.map(({ layer, field }) =>
+    freeStrain({ layer: { ...layer, stress: 0 }, field }, base, temperature),
   );
+  /** free strain without the stress's part, over the mean strain; one that all layers share bends nothing */
+  const alike = free.every((value) => value === free[0]);
+  const strain = Float64Array.from(free, (value) => (alike ? 0 : value - meanStrain));
+  const asStated = alike && coverage.every((share) => share === 1);
   const thickness = layersBottomToTop.reduce((total, layer) => total + layer.thickness, 0);
   const bottom = -thickness / 2 - solved.neutralPlane;
-  const modulus = new Float64Array(count);
-  const pressure = new Float64Array(count);
-  const sums = new Float64Array(LAMINATE_SUMS);
+  const width = 3 * count;
+  const most = stacksThatFit(count);
 
-  /** The sums for the set of inputs that starts at `at`. */
-  const sumRow = (inputs: Float64Array, at: number) => {
-    for (let n = 0; n < count; n += 1) {
-      const covered = (stiffening[n] ?? 0) * (inputs[at + count + n] ?? 0);
-      modulus[n] = covered;
-      pressure[n] = covered * (strain[n] ?? 0) - (coverage[n] ?? 0) * (inputs[at + 2 * count + n] ?? 0);
+  /** Puts what the layers would carry at the mean strain behind the rows in `LAYER_VALUES`. */
+  const holdStresses = (rows: number) => {
+    for (let row = 0; row < rows; row += 1) {
+      for (let n = 0; n < count; n += 1) {
+        const from = row * width + n;
+        const modulus = (stiffening[n] ?? 0) * (LAYER_VALUES[from + count] ?? 0);
+        const stress = (coverage[n] ?? 0) * (LAYER_VALUES[from + 2 * count] ?? 0);
+        LAYER_VALUES[rows * width + row * count + n] = stress - modulus * (strain[n] ?? 0);
+      }
     }
-    laminateSums(count, inputs, at, modulus, pressure, bottom, sums);
   };
+  /** Bends the sets of inputs from the one at `first` on, and returns how many fitted. */
+  const bendRows = (inputs: Float64Array, first: number, rows: number): number => {
+    const some = Math.min(most, rows - first);
+    if (inputs !== LAYER_VALUES) LAYER_VALUES.set(inputs.subarray(first * width, (first + some) * width));
+    for (let n = 0; n < count; n += 1) MODULUS_FACTORS[n] = stiffening[n] ?? 0;
+    if (asStated) {
+      bendStacks(some, count, bottom);
+    } else {
+      holdStresses(some);
+      bendStacks(some, count, bottom, some * width, count);
+    }
+    return some;
+  };
+  const block = most === MOST_STACKS ? { block: LAYER_VALUES } : {};
   return {
     curvature: {
-      inputs: 3 * count,
+      inputs: width,
+      ...block,
       evaluate(inputs, rows, out) {
-        for (let row = 0; row < rows; row += 1) {
-          sumRow(inputs, row * 3 * count);
-          out[row] = -strainPerHeightOf(sums);
+        for (let first = 0; first < rows;) {
+          const some = bendRows(inputs, first, rows);
+          for (let n = 0; n < some; n += 1) out[first + n] = curvatureOf(n);
+          first += some;
         }
       },
     },
     shape: (curve, figure) => {
       const of = figure === "warp" ? curve.warp : curve.sagitta;
+      const thicknesses = new Float64Array(most);
       return {
-        inputs: 3 * count,
+        inputs: width,
+        ...block,
         evaluate(inputs, rows, out) {
-          for (let row = 0; row < rows; row += 1) {
-            sumRow(inputs, row * 3 * count);
-            out[row] = of(-strainPerHeightOf(sums), Math.sqrt((12 * bendingStiffnessOf(sums)) / stretchingOf(sums)));
+          for (let first = 0; first < rows;) {
+            const some = bendRows(inputs, first, rows);
+            for (let n = 0; n < some; n += 1) {
+              thicknesses[n] = Math.sqrt((12 * bendingStiffnessOf(n)) / stretchingOf(n));
+              out[first + n] = curvatureOf(n);
+            }
+            // The curve may be anybody's, so it is asked when nothing of what was bent is needed any more.
+            for (let n = 0; n < some; n += 1) out[first + n] = of(out[first + n] ?? 0, thicknesses[n] ?? 0);
+            first += some;
           }
         },
       };

@@ -68,7 +68,7 @@ export function* lotSampling(i: LotInput): Generator<SamplingProgress, LotShare,
   // What differs between wafers is drawn about the lot, which takes the place of the best estimates.
   const lot = new Float64Array(width);
   const drawWafers = plainDrawing({ ...between, best: lot }, seededState(i.seed, 1));
-  const block = new Float64Array(BLOCK * width);
+  const block = model.block ?? new Float64Array(BLOCK * width);
   const figures = new Float64Array(wafers);
   const out = new Float64Array(BLOCK);
   const shares = new Float64Array(lots);

@@ -7,6 +7,11 @@ export type ScalarModel = (inputs: Float64Array) => number;
 export interface BlockModel {
   /** number of inputs, the length of a row */
   inputs: number;
+  /**
+   * Where the model likes to find its rows, `BLOCK` of them at most: filled and evaluated in one go they need not be copied. Other
+   * models may use the same.
+   */
+  block?: Float64Array;
   evaluate(inputs: Float64Array, rows: number, out: Float64Array): void;
 }
 

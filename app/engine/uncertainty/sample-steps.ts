@@ -37,12 +37,13 @@ export function* stepsSampling(i: StepsSamplingInput): Generator<SamplingProgres
     figures: new Float64Array(draws),
   }));
   const block = new Float64Array(BLOCK * width);
-  const picked = new Float64Array(BLOCK * Math.max(0, ...tasks.map(({ model }) => model.inputs)));
+  const room = new Float64Array(BLOCK * Math.max(0, ...tasks.map(({ model }) => model.inputs)));
   const out = new Float64Array(BLOCK);
   for (let done = 0; done < draws; done += BLOCK) {
     const rows = Math.min(BLOCK, draws - done);
     draw(block, rows);
     for (const { model, places, figures } of tasks) {
+      const picked = model.block ?? room;
       if (places) pick(block, width, places, rows, picked);
       model.evaluate(places ? picked : block, rows, out);
       requireFigures(out, rows);

@@ -86,7 +86,7 @@ export function* sampling(i: SamplingInput): Generator<SamplingProgress, Sampled
   const drawing = drawingOf(sources, line, method, i.seed, plan.size);
   const figures = new Float64Array(plan.draws);
   const lines = line && new Float64Array(plan.draws);
-  const block = new Float64Array(BLOCK * i.inputs.length);
+  const block = model.block ?? new Float64Array(BLOCK * i.inputs.length);
   const out = new Float64Array(BLOCK);
   const ends: number[] = [];
   let done = 0;

@@ -11,6 +11,7 @@ import { describe, expect, it } from "vitest";
 import { lockTemperature, slides, type BondState } from "#app/engine/flow/bond.ts";
 import type { BondingMaterialInput, FlowInput, StepInput } from "#app/engine/flow/model.ts";
 import { lockedState, settle } from "#app/engine/flow/settle.ts";
+import { sameState } from "#app/engine/flow/state.ts";
 import { walkFlow } from "#app/engine/flow/walk.ts";
 import { laminateWorking } from "#app/engine/laminate/working.ts";
 import { solveLaminate } from "#app/engine/laminate/solve-laminate.ts";
@@ -177,6 +178,32 @@ describe("a pair above its flow point", () => {
       0,
     );
     expect(relative(own, carried)).toBeLessThan(1e-9);
+  });
+});
+
+describe("whether two locked pairs bend alike from here on", () => {
+  const coming = (x: number, y: number): FlowInput => {
+    const plain = pair([hot(200)], thermoplastic(), []);
+    const incoming = { curvature: { x: exact(x), y: exact(y) }, filmShare: exact(1) };
+    return { ...plain, wafer: { ...plain.wafer, incoming } };
+  };
+
+  it("asks what they rest at by direction too, since the mean can be the same", () => {
+    const { after } = lastOf(coming(2e-2, -1e-2));
+    const rest = after.bond?.rest;
+    if (!after.bond || !rest?.unequal) throw new Error("a pair whose directions differ rests by direction");
+    expect(sameState(after, { ...after, bond: { ...after.bond, rest: structuredClone(rest) } })).toBe(true);
+    const {
+      carrier: { x, y, xy },
+    } = rest.unequal;
+    for (const change of [
+      { x: y, y: x, xy },
+      { x, y, xy: xy + 1e-9 },
+    ]) {
+      const unequal = { ...rest.unequal, carrier: change };
+      expect(sameState(after, { ...after, bond: { ...after.bond, rest: { ...rest, unequal } } })).toBe(false);
+    }
+    expect(sameState(after, { ...after, bond: { ...after.bond, rest: { ...rest, unequal: undefined } } })).toBe(false);
   });
 });
 
