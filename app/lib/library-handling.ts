@@ -12,6 +12,7 @@ import type {
   EquipmentHandlingValues,
   FilmHandlingValues,
 } from "#app/schemas/library-handling.ts";
+import type { CarrierUnitRow } from "./carrier-units.ts";
 import { given } from "./given.ts";
 
 interface CarrierFacts {
@@ -36,6 +37,15 @@ export function carrierHandlingOf({ reuseLimit, handling, ...carrier }: CarrierF
     useLimit: reuseLimit,
     ...given(handling),
   };
+}
+
+/** What the handling rules ask of one piece of a carrier. Its record counts the uses that are over. */
+export function pieceHandlingOf({
+  mark,
+  uses,
+  state,
+}: Pick<CarrierUnitRow, "mark" | "uses" | "state">): CarrierHandling {
+  return { identity: mark, uses, ...(state === "scrapped" ? { outOfUse: state } : {}) };
 }
 
 interface MaterialFacts {
