@@ -51,3 +51,8 @@ export function usesLeft({ uses, state }: Pick<CarrierUnitRow, "uses" | "state">
   if (left < 0) return `${-left} beyond its limit`;
   return left === 0 ? "none left" : `${left} left`;
 }
+
+/** A carrier by its name, with the mark of the piece where one is named. */
+export function withPieceMark(carrier: string, mark: string | null | undefined): string {
+  return mark ? `${carrier}, piece ${mark}` : carrier;
+}
