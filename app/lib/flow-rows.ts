@@ -4,7 +4,7 @@ import { formatQuantity } from "#app/engine/units/format.ts";
 import type { Exposure, FaceUp, Holding, Side } from "#app/engine/vocabulary.ts";
 import type { StepHandlingValues } from "#app/schemas/step-handling.ts";
 import { withPieceMark } from "./carrier-units.ts";
-import { runWords } from "./run-words.ts";
+import { holdWords, runWords } from "./run-words.ts";
 import { filmThicknessText, siliconText } from "./flow-thickness.ts";
 import { formatBare } from "./format-measured.ts";
 
@@ -136,7 +136,7 @@ export function stepRows(steps: readonly ShownStep[], incoming: Measured): StepR
       kind: step.kind,
       changes: changesOf(step),
       peak: formatBare(step.peakTemperature, "temperature", "°C"),
-      minutes: step.holdTime === null ? null : formatQuantity(step.holdTime, "time"),
+      minutes: holdWords({ holdTime: step.holdTime, profile: step.handling?.profile ?? null }),
       silicon: { text: siliconText(silicon), changed },
       tool: step.equipment?.name ?? null,
       run: runWords(step.handling ?? {}),

@@ -20,7 +20,7 @@ import { sentenceCase } from "./assessment-steps.ts";
 import { titleBlock, type AssessmentHead } from "./assessment-view.ts";
 import { formatBare } from "./format-measured.ts";
 import { doNotLines } from "./sheet-do-not.ts";
-import { runWords } from "./run-words.ts";
+import { holdWords, runWords } from "./run-words.ts";
 import { sheetGroups, type SheetGroup } from "./sheet-groups.ts";
 import { roundedRadius, roundedWarp } from "./sheet-round.ts";
 import { stopLines } from "./sheet-stop.ts";
@@ -178,12 +178,12 @@ function hottestText(steps: readonly StepResult[]): string {
   const peak = Math.max(...steps.map(({ peakTemperature }) => peakTemperature));
   if (peak <= WARM) return "room temperature";
   const hottest = steps.filter(({ peakTemperature }) => peakTemperature === peak);
-  const longest = Math.max(0, ...hottest.map(({ holdTime }) => holdTime ?? 0));
-  const minutes = longest > 0 ? `, ${formatQuantity(longest, "time", { unit: "min" })}` : "";
+  const longest = hottest.reduce((most, step) => ((step.holdTime ?? 0) > (most.holdTime ?? 0) ? step : most));
+  const minutes = (longest.holdTime ?? 0) > 0 ? `, ${holdWords(longest, "min") ?? ""}` : "";
   return `${celsius(peak)}${minutes}, ${stepsInWords(hottest.map(({ number }) => number))}`;
 }
 
-/** 'Steps 3 and 8 oven 3, recipe PI-5': where it is said which of several tools runs a step, or by which recipe. */
+/** 'Steps 3 and 8: oven 3, recipe PI-5': where it is said which of several tools runs a step, or by which recipe. */
 function runLines(steps: readonly StepResult[]): string[] {
   const runs = new Map<string, number[]>();
   for (const step of steps) {

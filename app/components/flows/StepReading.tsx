@@ -4,6 +4,7 @@ import type { Measured } from "#app/engine/measured.ts";
 import { formatQuantity } from "#app/engine/units/format.ts";
 import { stepHandlingWords } from "#app/lib/step-handling-words.ts";
 import { withPieceMark } from "#app/lib/carrier-units.ts";
+import { holdWords } from "#app/lib/run-words.ts";
 import { profileWords } from "#app/lib/temperature-profile.ts";
 import type { StepDetail } from "#app/schemas/flow-view.ts";
 
@@ -12,7 +13,7 @@ export function StepReading({ step }: { step: StepDetail }) {
   const words: [label: string, value: string | null][] = [
     ["Kind of step", step.kind],
     ["Peak temperature", formatQuantity(step.peakTemperature, "temperature", { unit: "°C" })],
-    ["Time at peak", step.holdTime === null ? null : formatQuantity(step.holdTime, "time")],
+    ["Time at peak", holdWords({ holdTime: step.holdTime, profile: step.handling.profile })],
     ["Tool", step.equipment?.name ?? "none chosen"],
     ["Exposed to", step.exposures.join(", ") || null],
     ["Held by, as planned", step.planned],

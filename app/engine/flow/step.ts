@@ -44,7 +44,7 @@ export function takeStep(
   const flat = heldFlat(step.planned);
   const options = { metalHistory, heldFlat: flat };
   const places = turningTemperatures(step);
-  const hottest = places.indexOf(step.peakTemperature);
+  const hottest = places.indexOf(Math.max(...places));
   const bonds = { bond: applied.bond, transfer: applied.transfer };
   const rebonds = applied.bond !== before.bond;
   let state = rebonds && hottest > 0 ? { ...applied, bond: before.bond, transfer: before.transfer } : applied;

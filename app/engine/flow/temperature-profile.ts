@@ -30,8 +30,8 @@ export function heatDuration({ profile, holdTime }: StepHeat): number | null {
 }
 
 /**
- * Temperatures (K) at which a step settles, in order: where its profile turns, on the way from 25 °C and back to it. A step without
- * one settles at its peak.
+ * Temperatures (K) at which a step settles, in order: where its profile turns, on the way from 25 °C and back to it; of one that only
+ * cools, 25 °C last. A step without one settles at its peak.
  * @throws EngineInputError when the profile has fewer than two points, a time that does not grow, or another peak than the step
  */
 export function turningTemperatures({ profile, peakTemperature }: StepHeat): [number, ...number[]] {
@@ -40,10 +40,12 @@ export function turningTemperatures({ profile, peakTemperature }: StepHeat): [nu
   const way = [ROOM_TEMPERATURE, ...profile.map(({ temperature }) => temperature), ROOM_TEMPERATURE];
   // A plateau is one place: its end is no turn.
   const steps = way.filter((temperature, at) => temperature !== way[at - 1]);
-  const [first = ROOM_TEMPERATURE, ...rest] = steps.filter((temperature, at) => {
+  const turns = steps.filter((temperature, at) => {
     const [before, after] = [steps[at - 1], steps[at + 1]];
     return before !== undefined && after !== undefined && before < temperature !== temperature < after;
   });
+  if (turns.every((temperature) => temperature <= ROOM_TEMPERATURE)) turns.push(ROOM_TEMPERATURE);
+  const [first = ROOM_TEMPERATURE, ...rest] = turns;
   return [first, ...rest];
 }
 
