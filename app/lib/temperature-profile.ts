@@ -11,7 +11,7 @@ export const PROFILE_EXAMPLE = "0 25; 30 150; 60 150; 90 230; 120 25";
 const MOST_POINTS = 40;
 const NUMBER = "[+-]?\\d+(?:[.,]\\d+)*";
 const UNIT = "[a-zA-Z°]+(?: [CFK](?![a-zA-Z]))?";
-const POINT = new RegExp(`^(${NUMBER}) ?(${UNIT})?(?:, ?| ?[:/] ?| )(${NUMBER}) ?(${UNIT})?$`);
+const POINT = new RegExp(`^(${NUMBER}) ?(${UNIT})?(?: ?, | ?[:/] ?| )(${NUMBER}) ?(${UNIT})?$`);
 
 const refuse = (message: string): ReadProfile => ({ ok: false, message });
 

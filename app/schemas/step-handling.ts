@@ -15,7 +15,7 @@ const optionalChoice = <Word extends string>(words: readonly Word[]) =>
 
 /** One of a list by its id, or none of it. */
 export const identifier = z
-  .union([z.uuid(), z.literal("")], "Choose one of the list.")
+  .union([z.uuid("Choose one of the list."), z.literal("")], "Choose one of the list.")
   .optional()
   .transform((id) => id || null);
 

@@ -14,6 +14,9 @@ import { useStepDrag } from "./use-step-drag.ts";
 /** Id of the form through which every change of the steps goes; its buttons stand in the rows. */
 export const STEPS_FORM = "change-steps";
 
+/** A flow of fewer steps is seen at a glance. */
+const SEARCHED_FROM = 8;
+
 interface Props {
   flowId: string;
   version: number;
@@ -64,18 +67,20 @@ export function FlowSteps({ flowId, version, rows, history, mayEdit, fault }: Pr
         </div>
       ) : (
         <div onKeyDown={mayEdit ? moveByKey : undefined}>
-          <div className="px-4 pt-4 tablet:px-6">
-            <ListHead what="steps">
-              {query !== "" && (
-                <p className="py-1.5 text-quiet" role="status">
-                  {found.length} of {rows.length} steps.{" "}
-                  <Link to={withParams(search, { q: null })} preventScrollReset className="link">
-                    Show all
-                  </Link>
-                </p>
-              )}
-            </ListHead>
-          </div>
+          {(rows.length > SEARCHED_FROM || query !== "") && (
+            <div className="px-4 pt-4 tablet:px-6">
+              <ListHead what="steps">
+                {query !== "" && (
+                  <p className="py-1.5 text-quiet" role="status">
+                    {found.length} of {rows.length} steps.{" "}
+                    <Link to={withParams(search, { q: null })} preventScrollReset className="link">
+                      Show all
+                    </Link>
+                  </p>
+                )}
+              </ListHead>
+            </div>
+          )}
           <StepTable
             caption="Steps of the flow"
             rows={found}
