@@ -27,7 +27,7 @@ export function StepDetails({ step }: { step: SelectedStep }) {
           <>
             <dt>Profile</dt>
             <dd>
-              {profile.words}
+              <p className="mb-2">{profile.words}</p>
               <ProfileDrawing profile={profile.points} label={`Temperature profile: ${profile.words}`} />
             </dd>
           </>
