@@ -1,4 +1,5 @@
 import type { SubmissionResult } from "@conform-to/react";
+import type { Measured } from "#app/engine/measured.ts";
 import type { RecordStamp } from "#app/schemas/record-stamp.ts";
 import type { ListPage } from "./list-params.ts";
 
@@ -26,6 +27,8 @@ export interface CarrierUnitRow {
   state: CarrierUnitState;
   /** ISO date */
   lastUsedOn: string | null;
+  /** measured on it; null until it is */
+  thicknessVariation: Measured | null;
   stamp: RecordStamp;
 }
 

@@ -23,6 +23,8 @@ const OTHER: Record<string, InputProperty> = {
   kind: { label: "Kind" },
   peakTemperature: { label: "Peak temperature", dimension: "temperature", unit: "°C" },
   holdTime: { label: "Time at peak", dimension: "time", unit: "min" },
+  time: { label: "Time", dimension: "time", unit: "min" },
+  temperature: { label: "Temperature", dimension: "temperature", unit: "°C" },
   profile: { label: "Temperature profile" },
   sideUp: { label: "Side up" },
   machine: { label: "Machine" },

@@ -39,13 +39,18 @@ export function carrierHandlingOf({ reuseLimit, handling, ...carrier }: CarrierF
   };
 }
 
+/** A piece as its kind's handling takes it. */
+export interface PieceFacts extends Pick<CarrierUnitRow, "mark" | "uses" | "state"> {
+  thicknessVariation?: Measured | null;
+}
+
 /** What the handling rules ask of one piece of a carrier. Its record counts the uses that are over. */
-export function pieceHandlingOf({
-  mark,
-  uses,
-  state,
-}: Pick<CarrierUnitRow, "mark" | "uses" | "state">): CarrierHandling {
-  return { identity: mark, uses, ...(state === "scrapped" ? { outOfUse: state } : {}) };
+export function pieceHandlingOf({ mark, uses, state, thicknessVariation }: PieceFacts): CarrierHandling {
+  return {
+    identity: mark,
+    uses,
+    ...given({ thicknessVariation, outOfUse: state === "scrapped" ? state : null }),
+  };
 }
 
 interface MaterialFacts {

@@ -14,6 +14,7 @@ const services = async () => ({
   ...(await import("#app/services/flows/step-page.server.ts")),
   ...(await import("#app/services/flows/step-library.server.ts")),
   ...(await import("#app/services/library/carrier-units.server.ts")),
+  ...(await import("#app/services/library/carrier-unit-form.server.ts")),
   ...(await import("#app/components/flows/step-form-values.ts")),
   ...(await import("#app/schemas/flow.ts")),
   ...(await import("#app/lib/what-if.ts")),
@@ -45,6 +46,27 @@ async function pieceOf(carrier: string, mark: string): Promise<string> {
   return added.id;
 }
 
+/** Posts the form of a piece's thickness variation; the status of what is not saved, null when it is. */
+async function measure(carrier: string, mark: string, variation: string): Promise<number | null> {
+  const { saveCarrierUnitForm } = await services();
+  const [unit] = await asOwner<{ id: string; carrier: string; version: number }>(
+    database,
+    `select unit.id, unit.version, carrier.id as carrier from carrier_unit unit
+       join carrier on carrier.id = unit.carrier_id where carrier.name = ? and mark = ?`,
+    [carrier, mark],
+  );
+  if (!unit) throw new Error("no such piece");
+  const body = new URLSearchParams({ change: "measure", piece: unit.id, version: String(unit.version), variation });
+  const request = new Request("http://127.0.0.1/", { method: "POST", body });
+  try {
+    const { init } = await saveCarrierUnitForm(request, owner, { carrierId: unit.carrier, back: "/" });
+    return init?.status ?? null;
+  } catch (answer) {
+    if (answer instanceof Response) return null;
+    throw answer;
+  }
+}
+
 /** Saves a step of a kind as its form would, with other handling. */
 async function save(flowId: string, kind: string, handling: Record<string, string>) {
   const { saveStep, stepPage, stepFormValues, stepSchema } = await services();
@@ -70,6 +92,7 @@ test("a profile and a piece that are saved reach the engine, and a what-if treat
   const { whatIfSnapshot, applyWhatIf, changedInput } = await services();
   const flowId = await ownFlow();
   const piece = await pieceOf("Glass carrier 3.0 ppm", "RUN-1");
+  await measure("Glass carrier 3.0 ppm", "RUN-1", "0.4 um");
   const { saved, stepId } = await save(flowId, "anneal", { profile: "0 25; 30 200; 60 200; 90 25", machine: "oven 3" });
   expect(saved).toMatchObject({ outcome: "saved" });
   const bond = await save(flowId, "bond", { carrierPiece: piece });
@@ -81,6 +104,7 @@ test("a profile and a piece that are saved reach the engine, and a what-if treat
   expect(snapshot.input.steps.find(({ kind }) => kind === "bond")?.bond?.carrier).toMatchObject({
     identity: "RUN-1",
     uses: 4,
+    thicknessVariation: { value: expect.closeTo(0.4e-6, 12) as number, source: "measured here" },
   });
 
   const other = snapshot.carriers.find(({ name }) => name === "Silicon carrier 775 µm")?.id ?? "";
@@ -119,4 +143,23 @@ test("a step that was stored before any of it was asked has none of it", async (
   expect(input.steps.every((step) => !("profile" in step) && !("sideUp" in step))).toBe(true);
   const { step } = await stepPage(scope, { flowId, stepId: stepIds[0] });
   expect(stepFormValues(step).handling).toMatchObject({ profile: "", sideUp: "", machine: "", carrierPiece: "" });
+});
+
+test("a thickness variation that cannot be read is refused, and a blank one takes it away", async () => {
+  const id = await pieceOf("Glass carrier 3.0 ppm", "RUN-4");
+  const kept = async () => {
+    const [row] = await asOwner<{ measured: { value: number } | null }>(
+      database,
+      "select thickness_variation as measured from carrier_unit where id = ?",
+      [id],
+    );
+    return row?.measured?.value ?? null;
+  };
+  for (const typed of ["12 parsecs", "-1 um", "3"])
+    expect(await measure("Glass carrier 3.0 ppm", "RUN-4", typed)).toBe(400);
+  expect(await kept()).toBeNull();
+  expect(await measure("Glass carrier 3.0 ppm", "RUN-4", "0,6 µm")).toBeNull();
+  expect(await kept()).toBeCloseTo(0.6e-6, 12);
+  expect(await measure("Glass carrier 3.0 ppm", "RUN-4", " ")).toBeNull();
+  expect(await kept()).toBeNull();
 });

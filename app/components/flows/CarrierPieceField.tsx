@@ -43,7 +43,7 @@ function Pieces(props: { field: FieldMetadata<string | undefined>; offered: Piec
         label: named ? `${mark}, ${carrierName}` : mark,
       }))}
       blank={offered.length === 0 ? "No piece known" : "Any piece"}
-      hint={words ?? "Named: its own uses are counted"}
+      hint={words ?? "Named: its own uses and thickness variation count"}
       select={{ onChange: (event) => setChosen(event.currentTarget.value) }}
     />
   );

@@ -83,12 +83,16 @@ export async function stepChoices(scope: ActorScope): Promise<StepChoices> {
       return { id: tool.id, name: short, words };
     }),
     carriers: carriers.map((carrier) => ({ id: carrier.id, name: carrier.name, words: carrierWords(carrier) })),
-    pieces: pieces.map(({ id, mark, uses, state, carrier }) => ({
+    pieces: pieces.map(({ id, mark, uses, state, carrier, thicknessVariation }) => ({
       id,
       mark,
       carrier: carrier.id,
       carrierName: carrier.name,
-      words: `${sentenceCase(state)}; used ${uses} of ${carrier.reuseLimit} times.`,
+      words: sentence([
+        sentenceCase(state),
+        `used ${uses} of ${carrier.reuseLimit} times`,
+        thicknessVariation ? `varies by ${um(thicknessVariation.value)}` : null,
+      ]),
     })),
     materials: materials.map((material) => ({
       id: material.id,
