@@ -22,7 +22,7 @@ test("a profile gives peak and time, and stands with machine and recipe in table
   await expect(page.getByText("From the profile: within 5 K of the peak")).toBeVisible();
   await page.getByLabel("Which of them").fill("oven 3");
   await page.getByLabel("Recipe").fill("PI-5 slow");
-  await page.getByLabel("Side up on the tool").selectOption("Back side");
+  await page.getByLabel("Side up").selectOption("Back side");
   await expectNoAxeFindings(page);
   await page.getByRole("button", { name: "Save step", exact: true }).last().click();
   await expect(page).toHaveURL(/\?step=/);

@@ -132,7 +132,7 @@ function StepFields(props: FieldsProps) {
           />
           <ChoiceField
             field={handling.sideUp}
-            label="Side up on the tool"
+            label="Side up"
             choices={sameWords(FACES_UP)}
             blank="As it comes"
             hint="Left open: as at the step before; bonding, mounting and debonding turn it as usual"
