@@ -45,7 +45,8 @@ export const SHAPE_WORDS = ["flat", "edges up", "edges down", "saddle", "rolls u
 export type ShapeWord = (typeof SHAPE_WORDS)[number];
 
 /** Which face is up on the tool: the pair lies carrier down from bond to debond, so its back side is up. */
-export type FaceUp = "device side" | "back side";
+export const FACES_UP = ["device side", "back side"] as const;
+export type FaceUp = (typeof FACES_UP)[number];
 
 /** Regime of a free wafer's shape: small bow, bow beyond the linear range, rolled about one axis. */
 export type ShapeRegime = "linear" | "nonlinear" | "curled";

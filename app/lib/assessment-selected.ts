@@ -1,4 +1,5 @@
 import { tightestStep } from "#app/engine/flow/answer.ts";
+import type { TemperatureProfile } from "#app/engine/flow/temperature-profile.ts";
 import { formatQuantity } from "#app/engine/units/format.ts";
 import { outcomeRank, type Outcome, type SourceKind } from "#app/engine/vocabulary.ts";
 import type { AssessmentResult, ShapeResult, StepResult } from "#app/schemas/assessment-result.ts";
@@ -6,6 +7,8 @@ import { celsius, micrometres } from "./assessment-figure.ts";
 import { bySeverity, findingView, type FindingView } from "./assessment-finding.ts";
 import { heldFlat, releasedText, shapeText, standardBowText } from "./assessment-shape.ts";
 import { sentenceCase } from "./assessment-steps.ts";
+import { runWords } from "./run-words.ts";
+import { profileWords } from "./temperature-profile.ts";
 import { withoutUnit } from "./format-measured.ts";
 
 /** The shapes of a step that have a working of their own. */
@@ -27,6 +30,10 @@ export interface SelectedStep {
   peak: ShapeLine | null;
   /** null where nothing holds it: it lies then as it does */
   released: ShapeLine | null;
+  /** which of several tools and by which recipe; null when neither is said */
+  run: string | null;
+  /** how it gets hot, to draw and in words; null when only the peak is known */
+  profile: { points: TemperatureProfile; words: string } | null;
   /** what its figures rest on that nobody stated */
   remarks: string[];
   /** what is not clear, worst first */
@@ -72,6 +79,8 @@ export function selectedStep(assessmentId: string, result: AssessmentResult, num
       : { text: `${sentenceCase(heldFlat(step.planned))}, ${step.faceUp} up.`, working: null },
     peak: step.atPeak && line("peak", step.atPeak, atPeak(step.atPeak)),
     released: step.planned === "bare" ? null : line("released", step.released, `${ifLetGo(step)}.`),
+    run: runWords(step),
+    profile: step.profile ? { points: step.profile, words: profileWords(step.profile) } : null,
     remarks: step.remarks ?? [],
     open: findings.filter(({ outcome }) => outcome !== "clear").sort(bySeverity),
     clear: findings.filter(({ outcome }) => outcome === "clear"),

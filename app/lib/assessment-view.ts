@@ -7,6 +7,7 @@ import { formatWithUncertainty } from "#app/engine/units/format.ts";
 import type { Outcome } from "#app/engine/vocabulary.ts";
 import type { AssessmentResult, BondResult, StepResult } from "#app/schemas/assessment-result.ts";
 import type { LotRecord } from "#app/schemas/lot.ts";
+import { withPieceMark } from "./carrier-units.ts";
 import { celsius, figureText, micrometres } from "./assessment-figure.ts";
 import { bySeverity, figureWorkingPath } from "./assessment-finding.ts";
 import { assessmentNumber } from "./assessment-number.ts";
@@ -184,7 +185,7 @@ function remedies(findings: Finding[]): RemedyView[] {
 function bondView(bond: BondResult): BondView {
   return {
     steps: bond.fromStep === bond.toStep ? `step ${bond.fromStep}` : `step ${bond.fromStep} to ${bond.toStep}`,
-    carrier: bond.carrier,
+    carrier: withPieceMark(bond.carrier, bond.piece),
     material: bond.material,
     thickness: micrometres(bond.thickness),
     limit: celsius(bond.temperatureLimit),

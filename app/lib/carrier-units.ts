@@ -1,4 +1,5 @@
 import type { SubmissionResult } from "@conform-to/react";
+import type { Measured } from "#app/engine/measured.ts";
 import type { RecordStamp } from "#app/schemas/record-stamp.ts";
 import type { ListPage } from "./list-params.ts";
 
@@ -26,6 +27,8 @@ export interface CarrierUnitRow {
   state: CarrierUnitState;
   /** ISO date */
   lastUsedOn: string | null;
+  /** measured on it; null until it is */
+  thicknessVariation: Measured | null;
   stamp: RecordStamp;
 }
 
@@ -50,4 +53,9 @@ export function usesLeft({ uses, state }: Pick<CarrierUnitRow, "uses" | "state">
   const left = limit - uses;
   if (left < 0) return `${-left} beyond its limit`;
   return left === 0 ? "none left" : `${left} left`;
+}
+
+/** A carrier by its name, with the mark of the piece where one is named. */
+export function withPieceMark(carrier: string, mark: string | null | undefined): string {
+  return mark ? `${carrier}, piece ${mark}` : carrier;
 }

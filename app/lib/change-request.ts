@@ -7,6 +7,7 @@ import type { Change, ChangeSubject, LibrarySubject } from "#app/schemas/change-
 import type { FlowDetail, StepDetail } from "#app/schemas/flow-view.ts";
 import { describedProperties, inputProperty, type InputProperty } from "./input-property.ts";
 import { limitQuantity } from "./limit-quantity.ts";
+import { planWithPeak } from "./step-edits.ts";
 import type { QuantityRule } from "./read-quantity.ts";
 
 /** A property that a change can set, with the rule that its new value is read by. */
@@ -100,7 +101,7 @@ function setIn(step: StepDetail, { subject, property, value, title }: Change): b
   switch (subject.kind) {
     case "step": {
       const meant = step.kind === subject.id && step.title.toLowerCase().includes(title.toLowerCase());
-      if (meant) step.peakTemperature = value;
+      if (meant) Object.assign(step, planWithPeak(step, value));
       return meant;
     }
     case "film": {

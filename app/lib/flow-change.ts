@@ -7,6 +7,7 @@ import type { Measured } from "#app/engine/measured.ts";
 import type { FlowPlan, StepPlan } from "#app/schemas/flow-plan.ts";
 import type { StepValues } from "#app/schemas/flow.ts";
 import { BLANK_STEP } from "./blank-step.ts";
+import { planWithCarrier, planWithPeak } from "./step-edits.ts";
 
 /**
  * The changes that the engine tries, made in a flow's stored plan. Both must come to the same flow, which a test holds; only the
@@ -49,7 +50,7 @@ function changedStep(step: StepPlan, change: StepChange, context: PlanContext): 
     case "silicon after":
       return { ...step, siliconAfter: at(step.siliconAfter, change.value) };
     case "peak temperature":
-      return { ...step, peakTemperature: change.value };
+      return planWithPeak(step, change.value);
     case "bond thickness":
       return { ...step, bondThickness: at(step.bondThickness, change.value) };
     case "trim depth":
@@ -118,22 +119,24 @@ function rebonded(
       nameOf(materials, bond.bondingMaterial),
       material.name,
     );
+  const made = planWithCarrier(
+    otherMaterial ? planWithPeak(bond, material.bondTemperature.value) : bond,
+    change.carrier,
+  );
   const next: StepPlan = {
-    ...bond,
+    ...made,
     title: renamed(bond.title),
-    carrier: change.carrier,
     bondingMaterial: change.material,
-    peakTemperature: otherMaterial ? material.bondTemperature.value : bond.peakTemperature,
     bondThickness: sameLayer
       ? bond.bondThickness
       : tried(otherMaterial ? null : bond.bondThickness, change.thickness, FINDER_NOTE),
-    handling: sameLayer ? bond.handling : { ...bond.handling, bondThicknessVariation: null },
+    handling: sameLayer ? made.handling : { ...made.handling, bondThicknessVariation: null },
   };
   const span = spansOfKinds(steps.map(({ kind }) => kind)).find(({ from }) => from === change.step);
   return steps.map((step, index) => {
     if (index + 1 === change.step) return next;
     if (index + 1 !== span?.to || !otherMaterial) return step;
-    return { ...step, title: `Debond, ${material.release}`, peakTemperature: material.releaseTemperature.value };
+    return { ...planWithPeak(step, material.releaseTemperature.value), title: `Debond, ${material.release}` };
   });
 }
 

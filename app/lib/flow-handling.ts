@@ -1,4 +1,5 @@
 import type { BondHandling, Resistances, StepHandling, TapeInput } from "#app/engine/flow/handling-inputs.ts";
+import type { StepInput } from "#app/engine/flow/model.ts";
 import type { StepHandlingValues } from "#app/schemas/step-handling.ts";
 
 type Given<Value> = { [Key in keyof Value]: NonNullable<Value[Key]> };
@@ -51,6 +52,11 @@ export function stepHandlingOf(handling: StepHandlingValues): StepHandling {
     viaProtrusion: handling.viaProtrusion,
     thicknessVariation: handling.thicknessVariation,
   });
+}
+
+/** How the step is run: what its form keeps beside the handling, as the engine takes it. */
+export function stepRunOf({ profile, sideUp, machine, recipe }: StepHandlingValues): Partial<StepInput> {
+  return given({ profile, sideUp, machine, recipe });
 }
 
 /** What is given of the bond that a step makes. */

@@ -1,7 +1,10 @@
 import type { StepKind } from "#app/engine/flow/model.ts";
 import type { Measured } from "#app/engine/measured.ts";
 import { formatQuantity } from "#app/engine/units/format.ts";
-import type { Exposure, Holding, Side } from "#app/engine/vocabulary.ts";
+import type { Exposure, FaceUp, Holding, Side } from "#app/engine/vocabulary.ts";
+import type { StepHandlingValues } from "#app/schemas/step-handling.ts";
+import { withPieceMark } from "./carrier-units.ts";
+import { holdWords, runWords } from "./run-words.ts";
 import { filmThicknessText, siliconText } from "./flow-thickness.ts";
 import { formatBare } from "./format-measured.ts";
 
@@ -20,9 +23,11 @@ export interface ShownStep {
   siliconAfter: Measured | null;
   trimWidth: Measured | null;
   trimDepth: Measured | null;
-  carrier: { name: string } | null;
+  /** `identity` is the mark of the piece that is named */
+  carrier: { name: string; identity?: string | null } | null;
   bondingMaterial: { name: string } | null;
   bondThickness: Measured | null;
+  handling?: Partial<Pick<StepHandlingValues, "machine" | "recipe" | "sideUp" | "profile">>;
   films: {
     change: "adds" | "removes";
     side: Side;
@@ -46,6 +51,12 @@ export interface StepRow {
   /** µm, without the unit */
   silicon: { text: string; changed: boolean };
   tool: string | null;
+  /** which of several tools and by which recipe: 'oven 3, recipe PI-5'; null when neither is said */
+  run: string | null;
+  /** as stated; null where it is as it comes */
+  sideUp: FaceUp | null;
+  /** peak and minutes are those of a profile */
+  profiled: boolean;
   exposures: Exposure[];
   planned: Holding;
   /** the carrier that it is on after the step, with what bonds it at the step that bonds */
@@ -97,7 +108,11 @@ function isAssumed(step: ShownStep): boolean {
 }
 
 function bondWords({ carrier, bondingMaterial, bondThickness }: ShownStep): string {
-  return [carrier?.name, bondingMaterial?.name, bondThickness && length(bondThickness.value, "µm")]
+  return [
+    carrier && withPieceMark(carrier.name, carrier.identity),
+    bondingMaterial?.name,
+    bondThickness && length(bondThickness.value, "µm"),
+  ]
     .filter(Boolean)
     .join(", ");
 }
@@ -121,9 +136,12 @@ export function stepRows(steps: readonly ShownStep[], incoming: Measured): StepR
       kind: step.kind,
       changes: changesOf(step),
       peak: formatBare(step.peakTemperature, "temperature", "°C"),
-      minutes: step.holdTime === null ? null : formatQuantity(step.holdTime, "time"),
+      minutes: holdWords({ holdTime: step.holdTime, profile: step.handling?.profile ?? null }),
       silicon: { text: siliconText(silicon), changed },
       tool: step.equipment?.name ?? null,
+      run: runWords(step.handling ?? {}),
+      sideUp: step.handling?.sideUp ?? null,
+      profiled: Boolean(step.handling?.profile),
       exposures: step.exposures,
       planned: step.planned,
       bond,

@@ -5,10 +5,22 @@ export interface ExplainedChoice {
   words: string;
 }
 
+/** One piece of a kind of carrier. */
+export interface PieceChoice {
+  id: string;
+  mark: string;
+  /** id and name of its kind */
+  carrier: string;
+  carrierName: string;
+  words: string;
+}
+
 /** What the form of a step offers. */
 export interface StepChoices {
   films: ExplainedChoice[];
   tools: ExplainedChoice[];
   carriers: ExplainedChoice[];
+  /** none where no piece may be named, as in a step for every flow */
+  pieces: PieceChoice[];
   materials: ExplainedChoice[];
 }

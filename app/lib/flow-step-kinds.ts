@@ -41,6 +41,7 @@ export const KIND_FIELDS: readonly KindField[] = [
   { field: "viaProtrusion", group: "groundFace", who: THINNING },
   { field: "bondFace", group: "bond", who: "a bond" },
   { field: "bondThicknessVariation", group: "bond", who: "a bond" },
+  { field: "carrierPiece", group: "bond", who: "a bond" },
   { field: "tapeName", group: "tape", who: TAPE },
   { field: "tapeTemperatureLimit", group: "tape", who: TAPE },
   { field: "tapeEmbeddingDepth", group: "tape", who: TAPE },

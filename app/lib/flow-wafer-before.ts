@@ -1,6 +1,7 @@
 import { EngineInputError } from "#app/engine/errors.ts";
 import type { FlowInput } from "#app/engine/flow/model.ts";
 import { applyStep, initialState, type FilmState, type WaferState } from "#app/engine/flow/state.ts";
+import type { FaceUp } from "#app/engine/vocabulary.ts";
 import { formatQuantity } from "#app/engine/units/format.ts";
 import { filmThicknessText, siliconText } from "./flow-thickness.ts";
 
@@ -13,6 +14,7 @@ export interface WaferBefore {
   back: string[];
   /** carrier, tape or frame that it is on; null when it is free */
   on: string | null;
+  faceUp: FaceUp;
 }
 
 function filmWords({ addition: { film, thickness, coverage } }: FilmState): string {
@@ -38,6 +40,7 @@ export function waferBefore(flow: FlowInput, index: number): WaferBefore | null 
     silicon: `${siliconText(state.silicon)}\u00A0µm`,
     front: state.front.map(filmWords).toReversed(),
     back: state.back.map(filmWords),
+    faceUp: state.faceUp,
     on: state.bond ? `${state.bond.carrier.name}, ${state.bond.material.name}` : state.mount,
   };
 }

@@ -12,6 +12,7 @@ import type {
   EquipmentHandlingValues,
   FilmHandlingValues,
 } from "#app/schemas/library-handling.ts";
+import type { CarrierUnitRow } from "./carrier-units.ts";
 import { given } from "./given.ts";
 
 interface CarrierFacts {
@@ -35,6 +36,20 @@ export function carrierHandlingOf({ reuseLimit, handling, ...carrier }: CarrierF
     perforated,
     useLimit: reuseLimit,
     ...given(handling),
+  };
+}
+
+/** A piece as its kind's handling takes it. */
+export interface PieceFacts extends Pick<CarrierUnitRow, "mark" | "uses" | "state"> {
+  thicknessVariation?: Measured | null;
+}
+
+/** What the handling rules ask of one piece of a carrier. Its record counts the uses that are over. */
+export function pieceHandlingOf({ mark, uses, state, thicknessVariation }: PieceFacts): CarrierHandling {
+  return {
+    identity: mark,
+    uses,
+    ...given({ thicknessVariation, outOfUse: state === "scrapped" ? state : null }),
   };
 }
 

@@ -1,5 +1,6 @@
 import { EngineInputError } from "#app/engine/errors.ts";
 import { edgesUp } from "#app/engine/flow/shape.ts";
+import { faceUpLoaded } from "#app/engine/flow/state.ts";
 import { walkFlow, type StepState } from "#app/engine/flow/walk.ts";
 import type { Finding } from "#app/engine/rules/finding.ts";
 import { warpRule } from "#app/engine/rules/rule-02-warp.ts";
@@ -50,7 +51,7 @@ function placeOf(steps: readonly StepState[], { step, figures, limit }: Finding)
   const warp = figures[0]?.value ?? 0;
   const [own, before] = [steps[step - 1], steps[step - 2]];
   const shapes = [
-    { shape: before?.atRoom, faceUp: before?.after.faceUp },
+    { shape: before?.atRoom, faceUp: own && faceUpLoaded(own.before, own.step) },
     { shape: own?.atRoom, faceUp: own?.after.faceUp },
     { shape: own?.atPeak, faceUp: own?.after.faceUp },
   ];

@@ -21,12 +21,16 @@ export interface QuantityRule {
 export type ReadQuantity =
   { ok: true; value: number; understood: string } | { ok: false; blank: boolean; message: string };
 
+/** What a quantity that must be given is told when it is blank. */
+export const blankMessage = ({ label }: Pick<QuantityRule, "label">) =>
+  `Type the ${label}. Blank is missing, not zero.`;
+
 /** Reads one quantity. The same on the server and while it is being typed, so both say the same. */
 export function readQuantity(typed: string | undefined, { label, dimension, range }: QuantityRule): ReadQuantity {
   const parsed = parseQuantity(typed ?? "", dimension);
   if (!parsed.ok)
     return parsed.code === "blank"
-      ? { ok: false, blank: true, message: `Type the ${label}. Blank is missing, not zero.` }
+      ? { ok: false, blank: true, message: blankMessage({ label }) }
       : { ok: false, blank: false, message: parsed.message };
   if (parsed.value < range.least || parsed.value > range.most)
     return { ok: false, blank: false, message: `${parsed.understood} is outside ${range.words}.` };

@@ -99,8 +99,8 @@ function groupHeight(group: SheetGroupView, frame: number): number {
 const SIGN_AND_GAPS = 52;
 
 /** What stands of a group in the first column. */
-export function waferLines({ silicon, shape, hottest, touch }: SheetGroupView): string[] {
-  return [`Silicon ${silicon}`, ...shape.map((line) => `Lies ${line}`), `Hottest ${hottest}`, touch];
+export function waferLines({ silicon, shape, hottest, runs, touch }: SheetGroupView): string[] {
+  return [`Silicon ${silicon}`, ...shape.map((line) => `Lies ${line}`), `Hottest ${hottest}`, ...runs, touch];
 }
 
 function footHeight({ bonds, tapes }: SheetView, frame: number): number {

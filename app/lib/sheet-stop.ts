@@ -40,12 +40,22 @@ function judged(steps: readonly StepResult[], edge: Edge, before: StepResult | n
     const limit = step.equipment?.[edge] ?? null;
     // Held flat, it has nothing to read.
     if (limit === null || !step.atRoom) return [];
-    const shapes = [(index === 0 ? before : steps[index - 1])?.atRoom, step.atRoom];
-    const warps = shapes.flatMap((shape) => (shape && shape.edgesUp === (edge === "edgesUp") ? [shape.warp] : []));
+    const previous = index === 0 ? before : (steps[index - 1] ?? null);
+    const lying = [
+      { shape: previous?.atRoom, turned: isTurned(previous, step) },
+      { shape: step.atRoom, turned: false },
+    ];
+    const warps = lying.flatMap(({ shape, turned }) =>
+      shape && (shape.edgesUp !== turned) === (edge === "edgesUp") ? [shape.warp] : [],
+    );
     const expected = Math.max(0, ...warps);
     return [{ number: step.number, limit, expected: expected > limit ? 0 : expected }];
   });
 }
+
+/** Whether the wafer is turned over between two steps, so that what was edges up is loaded edges down. */
+const isTurned = (previous: StepResult | null, { loadedFaceUp }: StepResult) =>
+  previous !== null && loadedFaceUp !== undefined && loadedFaceUp !== previous.faceUp;
 
 /** The readings in words: 'Over 400 µm edges up or down', or one line each with the steps where they differ. */
 export function stopLines(steps: readonly StepResult[], before: StepResult | null): string[] {

@@ -11,6 +11,7 @@ import {
   type SupportClass,
 } from "#app/engine/vocabulary.ts";
 import type { AssessmentResult, BondResult, ShapeResult, StepResult } from "#app/schemas/assessment-result.ts";
+import { withPieceMark } from "./carrier-units.ts";
 import { celsius } from "./assessment-figure.ts";
 import { assessmentNumber } from "./assessment-number.ts";
 import { revisionOf } from "./assessment-revision.ts";
@@ -19,6 +20,7 @@ import { sentenceCase } from "./assessment-steps.ts";
 import { titleBlock, type AssessmentHead } from "./assessment-view.ts";
 import { formatBare } from "./format-measured.ts";
 import { doNotLines } from "./sheet-do-not.ts";
+import { holdWords, runWords } from "./run-words.ts";
 import { sheetGroups, type SheetGroup } from "./sheet-groups.ts";
 import { roundedRadius, roundedWarp } from "./sheet-round.ts";
 import { stopLines } from "./sheet-stop.ts";
@@ -34,6 +36,8 @@ export interface SheetGroupView {
   touch: string;
   silicon: string;
   hottest: string;
+  /** which of several tools and by which recipe, one line each */
+  runs: string[];
   /** one line for each direction that it lies in */
   shape: string[];
   bow: { shape: BowShape; deviceSideUp: boolean; holding: Holding };
@@ -136,6 +140,7 @@ function groupView(group: SheetGroup, before: StepResult | null, result: Assessm
     touch: TOUCH[holding],
     silicon: siliconText(steps),
     hottest: hottestText(steps),
+    runs: runLines(steps),
     shape: shapeLines(steps),
     bow: {
       shape: lyingAs(worst?.atRoom ?? null),
@@ -173,9 +178,19 @@ function hottestText(steps: readonly StepResult[]): string {
   const peak = Math.max(...steps.map(({ peakTemperature }) => peakTemperature));
   if (peak <= WARM) return "room temperature";
   const hottest = steps.filter(({ peakTemperature }) => peakTemperature === peak);
-  const longest = Math.max(0, ...hottest.map(({ holdTime }) => holdTime ?? 0));
-  const minutes = longest > 0 ? `, ${formatQuantity(longest, "time", { unit: "min" })}` : "";
+  const longest = hottest.reduce((most, step) => ((step.holdTime ?? 0) > (most.holdTime ?? 0) ? step : most));
+  const minutes = (longest.holdTime ?? 0) > 0 ? `, ${holdWords(longest, "min") ?? ""}` : "";
   return `${celsius(peak)}${minutes}, ${stepsInWords(hottest.map(({ number }) => number))}`;
+}
+
+/** 'Steps 3 and 8: oven 3, recipe PI-5': where it is said which of several tools runs a step, or by which recipe. */
+function runLines(steps: readonly StepResult[]): string[] {
+  const runs = new Map<string, number[]>();
+  for (const step of steps) {
+    const run = runWords(step);
+    if (run) runs.set(run, [...(runs.get(run) ?? []), step.number]);
+  }
+  return [...runs].map(([run, numbers]) => `${sentenceCase(stepsInWords(numbers))}: ${run}`);
 }
 
 /** The step that lies least flat; null when it is held flat throughout. */
@@ -220,11 +235,11 @@ const DEBOND_WORDS: Record<ReleaseMethod, string> = {
   "solvent through perforated carrier": "solvent through the carrier",
 };
 
-function bondView({ fromStep, toStep, carrier, material, release }: BondResult, steps: readonly StepResult[]) {
+function bondView({ fromStep, toStep, carrier, piece, material, release }: BondResult, steps: readonly StepResult[]) {
   const debond = steps.find(({ number }) => number === toStep + 1);
   return {
     steps: stepsInWords(Array.from({ length: toStep - fromStep + 1 }, (_, index) => fromStep + index)),
-    carrier,
+    carrier: withPieceMark(carrier, piece),
     material,
     debond: debond ? `step ${debond.number}, ${DEBOND_WORDS[release]}` : "not in this flow",
   };

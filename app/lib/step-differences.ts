@@ -16,6 +16,9 @@ const measuredWords = (measured: Measured | null, dimension: Dimension, unit: st
 const choiceWords = (list: ExplainedChoice[], id: string | null) =>
   id === null ? NOTHING : (list.find((each) => each.id === id)?.name ?? "no longer in the library");
 
+const pieceWords = ({ pieces }: StepChoices, id: string | null) =>
+  id === null ? NOTHING : (pieces.find((piece) => piece.id === id)?.mark ?? "no longer in the library");
+
 function filmWords({ films }: StepValues, choices: StepChoices): string {
   if (films.length === 0) return "none";
   return films
@@ -48,6 +51,7 @@ function stepWords(step: StepValues, choices: StepChoices): [label: string, word
     ["Width of the trim", measuredWords(step.trimWidth, "length", "mm")],
     ["Depth of the trim", measuredWords(step.trimDepth, "length", "µm")],
     ["Carrier", choiceWords(choices.carriers, step.carrier)],
+    ["Piece of the carrier", pieceWords(choices, step.handling.carrierPiece)],
     ["Bonding material", choiceWords(choices.materials, step.bondingMaterial)],
     ["Thickness of the bond", measuredWords(step.bondThickness, "length", "µm")],
     ["Films", filmWords(step, choices)],

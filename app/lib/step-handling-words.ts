@@ -4,6 +4,7 @@ import type { Measured } from "#app/engine/measured.ts";
 import type { Side } from "#app/engine/vocabulary.ts";
 import type { StepHandlingValues } from "#app/schemas/step-handling.ts";
 import { formatMeasured } from "./format-measured.ts";
+import { profileWords } from "./temperature-profile.ts";
 
 const yesOrNo = (answer: boolean | null) => (answer === null ? null : answer ? "yes" : "no");
 const face = (side: Side | null) => (side === null ? null : side === "front" ? "device side" : "back side");
@@ -18,6 +19,10 @@ export function stepHandlingWords(handling: StepHandlingValues): [label: string,
   const times = Object.entries(handling.exposureTimes).map(([exposure, seconds]) => `${exposure} ${time(seconds)}`);
   const limit = handling.tapeTemperatureLimit;
   return [
+    ["Temperature profile", handling.profile && profileWords(handling.profile)],
+    ["Machine", handling.machine],
+    ["Recipe", handling.recipe],
+    ["Side up", handling.sideUp],
     ["Time exposed", times.length > 0 ? times.join(", ") : null],
     ["Kind of solvent", handling.solvent],
     ["Baked dry before the vacuum", yesOrNo(handling.dehydrationBake)],

@@ -1,8 +1,10 @@
 import type { FlowInput, StepInput } from "#app/engine/flow/model.ts";
+import { withPeak } from "#app/engine/flow/temperature-profile.ts";
 import type { Measured } from "#app/engine/measured.ts";
 import { tried as triedAt } from "#app/engine/trial/tried.ts";
 import type { Holding } from "#app/engine/vocabulary.ts";
 import type { FlowPlan, StepPlan } from "#app/schemas/flow-plan.ts";
+import { planWithCarrier, planWithPeak } from "./step-edits.ts";
 import type { WhatIfChange, WhatIfSnapshot } from "#app/schemas/what-if.ts";
 
 /**
@@ -33,12 +35,12 @@ function changedStep(step: StepInput, change: WhatIfChange, { carriers, material
     case "siliconAfter":
       return { ...step, siliconAfter: tried(step.siliconAfter, change.value) };
     case "peakTemperature":
-      return { ...step, peakTemperature: change.value };
+      return withPeak(step, change.value);
     case "planned":
       return { ...step, planned: change.value as Holding };
     case "carrier": {
       const carrier = carriers.find(({ id }) => id === change.value);
-      return bond && carrier ? { ...step, bond: { ...bond, carrier } } : step;
+      return bond && carrier && bond.carrier.id !== carrier.id ? { ...step, bond: { ...bond, carrier } } : step;
     }
     case "bondingMaterial": {
       const material = materials.find(({ id }) => id === change.value);
@@ -75,11 +77,11 @@ function changedPlanStep(step: StepPlan, change: WhatIfChange, stressOf: StressO
     case "siliconAfter":
       return { ...step, siliconAfter: tried(step.siliconAfter, change.value) };
     case "peakTemperature":
-      return { ...step, peakTemperature: change.value };
+      return planWithPeak(step, change.value);
     case "planned":
       return { ...step, planned: change.value as Holding };
     case "carrier":
-      return step.carrier === null ? step : { ...step, carrier: change.value };
+      return step.carrier === null ? step : planWithCarrier(step, change.value);
     case "bondingMaterial":
       return step.bondingMaterial === null ? step : { ...step, bondingMaterial: change.value };
     case "filmThickness":

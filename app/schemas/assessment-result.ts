@@ -10,6 +10,7 @@ import type {
 import type { ReleaseMethod, StepKind } from "#app/engine/flow/model.ts";
 import type { Finding } from "#app/engine/rules/finding.ts";
 import type { AssumedInput, Verdict } from "#app/engine/flow/assess.ts";
+import type { TemperatureProfile } from "#app/engine/flow/temperature-profile.ts";
 import type { Contribution } from "#app/engine/flow/uncertainty.ts";
 import type { Working } from "#app/engine/working.ts";
 
@@ -35,6 +36,10 @@ export interface StepResult {
   peakTemperature: number;
   holdTime: number | null;
   exposures: Exposure[];
+  /** how it gets hot, where that is known; which of several tools and by which recipe */
+  profile?: TemperatureProfile;
+  machine?: string;
+  recipe?: string;
   equipment: { name: string; edgesUp: number | null; edgesDown: number | null } | null;
   siliconBefore: number;
   silicon: number;
@@ -46,6 +51,8 @@ export interface StepResult {
   plannedName: string;
   required: SupportClass;
   faceUp: FaceUp;
+  /** side up as it is loaded, where it is turned over for the step */
+  loadedFaceUp?: FaceUp;
   lies: ShapeWord;
   atRoom: ShapeResult | null;
   atPeak: ShapeResult | null;
@@ -64,6 +71,8 @@ export interface BondResult {
   fromStep: number;
   toStep: number;
   carrier: string;
+  /** mark of the piece that is named */
+  piece?: string;
   carrierDiameter: number;
   material: string;
   thickness: number;

@@ -1,25 +1,23 @@
 import { z } from "zod";
 import { WAFER_KINDS } from "#app/engine/flow/handling-inputs.ts";
 import { STEP_KINDS } from "#app/engine/flow/model.ts";
+import { profileHeat } from "#app/engine/flow/temperature-profile.ts";
+import { ROOM_TEMPERATURE } from "#app/engine/laminate/layer.ts";
 import type { Measured } from "#app/engine/measured.ts";
 import { EXPOSURES, HOLDINGS } from "#app/engine/vocabulary.ts";
 import { exposureKey } from "#app/lib/exposure-key.ts";
 import { inputsOf, KIND_FIELDS } from "#app/lib/flow-step-kinds.ts";
-import { measured, optionalMeasured, optionalQuantity, quantity } from "./quantity.ts";
+import { blankMessage } from "#app/lib/read-quantity.ts";
+import { measured, optionalMeasured, optionalQuantity } from "./quantity.ts";
 import { RULES } from "./ranges.ts";
 import { recordFields } from "./record-fields.ts";
-import { stepHandling, type StepHandlingValues } from "./step-handling.ts";
+import { identifier, stepHandling, type StepHandlingValues } from "./step-handling.ts";
 
 const SPREAD = "The tolerance is as large as the thickness itself.";
 
 /** A thickness whose tolerance reaches zero says that there may be none of it. */
 const reachesZero = (thickness: Measured | null | undefined) =>
   typeof thickness?.tolerance === "number" && thickness.tolerance >= thickness.value;
-
-const identifier = z
-  .union([z.uuid(), z.literal("")], "Choose one of the list.")
-  .optional()
-  .transform((id) => id || null);
 
 const flowFields = {
   ...recordFields,
@@ -85,11 +83,14 @@ const filmChange = z.object({
   coverage: optionalQuantity(RULES.coverage),
 });
 
+const PEAK = { ...RULES.temperature, label: "peak temperature" };
+
 /** Fields of a step, each by itself. */
 const stepFields = z.object({
   title: z.string("Say what is done.").trim().min(1, "Say what is done.").max(120, "Keep it under 120 characters."),
   kind: z.enum(STEP_KINDS, "Choose the kind of step."),
-  peakTemperature: quantity({ ...RULES.temperature, label: "peak temperature" }),
+  /** K; with a profile it follows from that */
+  peakTemperature: optionalQuantity(PEAK),
   holdTime: optionalQuantity(RULES.holdTime),
   equipment: identifier,
   exposures: z
@@ -111,14 +112,16 @@ const stepFields = z.object({
     .transform((list) => list ?? []),
   handling: stepHandling.prefault({}),
 });
-export type StepValues = z.output<typeof stepFields>;
+type StepFields = z.output<typeof stepFields>;
+/** A step as it is kept. */
+export type StepValues = Omit<StepFields, "peakTemperature"> & { peakTemperature: number };
 
 /** A step some of whose fields may not have been understood. */
 type Partly<Values> = { [Field in keyof Values]?: Values[Field] | undefined };
 type Fail = (path: (string | number)[], message: string) => void;
 
 /** What the kind of step asks for, and what it has no use for: that must not lie in wait unseen. */
-function checkKind(step: Partly<StepValues>, fail: Fail): void {
+function checkKind(step: Partly<StepFields>, fail: Fail): void {
   if (!step.kind) return;
   const has = inputsOf(step.kind);
   if (has.bond) {
@@ -146,7 +149,7 @@ function checkKind(step: Partly<StepValues>, fail: Fail): void {
 }
 
 /** What is given for handling must have something to belong to. */
-function checkHandling(handling: StepHandlingValues, step: Partly<StepValues>, fail: Fail): void {
+function checkHandling(handling: StepHandlingValues, step: Partly<StepFields>, fail: Fail): void {
   const { exposures = [], kind } = step;
   for (const exposure of EXPOSURES)
     if (typeof handling.exposureTimes[exposure] === "number" && !exposures.includes(exposure))
@@ -180,13 +183,15 @@ function checkFilm({ change, thickness, stress, coverage }: Partly<StepValues["f
 }
 
 /** Looks at the fields together. A field that has been spoken of already is not spoken of again. */
-function checkStep(step: Partly<StepValues>, context: z.core.$RefinementCtx): void {
+function checkStep(step: Partly<StepFields>, context: z.core.$RefinementCtx): void {
   const spokenOf = context.issues.map(({ path }) => `${path?.join(".")}.`);
   const fail: Fail = (path, message) => {
     const field = path.filter((part) => part !== "value" && part !== "tolerance").join(".");
     if (spokenOf.some((known) => known.startsWith(`${field}.`))) return;
     context.addIssue({ code: "custom", path, message });
   };
+  if (step.peakTemperature === null && typeof step.handling === "object" && !step.handling.profile)
+    fail(["peakTemperature"], blankMessage(PEAK));
   checkKind(step, fail);
   if (step.kind && typeof step.handling === "object") checkHandling(step.handling, step, fail);
   for (const field of ["siliconAfter", "trimWidth", "trimDepth", "bondThickness"] as const)
@@ -200,6 +205,12 @@ function checkStep(step: Partly<StepValues>, context: z.core.$RefinementCtx): vo
  * A step of a flow. Everything that is wrong is said at once, so the step as a whole is looked at even when a field of it was not
  * understood. Whether the order of steps makes sense is not asked here: the order rule says so in the assessment.
  */
-export const stepSchema = stepFields.superRefine(checkStep, {
-  when: ({ value }) => typeof value === "object" && value !== null,
-});
+export const stepSchema = stepFields
+  .superRefine(checkStep, { when: ({ value }) => typeof value === "object" && value !== null })
+  .transform((step): StepValues => {
+    const { profile } = step.handling;
+    return { ...step, ...heatOf(step), ...(profile ? profileHeat(profile) : {}) };
+  });
+
+/** The peak that `checkStep` has asked for. */
+const heatOf = ({ peakTemperature }: StepFields) => ({ peakTemperature: peakTemperature ?? ROOM_TEMPERATURE });

@@ -1,7 +1,8 @@
 import { z } from "zod";
 import { CONTACT_MEANS, RESISTANCE_WORDS, SOLVENT_FAMILIES } from "#app/engine/flow/handling-inputs.ts";
-import { EXPOSURES, type Exposure } from "#app/engine/vocabulary.ts";
+import { EXPOSURES, FACES_UP, type Exposure } from "#app/engine/vocabulary.ts";
 import { exposureKey } from "#app/lib/exposure-key.ts";
+import { readProfile } from "#app/lib/temperature-profile.ts";
 import { optionalMeasured, optionalQuantity } from "./quantity.ts";
 import { RULES } from "./ranges.ts";
 
@@ -11,6 +12,12 @@ const optionalChoice = <Word extends string>(words: readonly Word[]) =>
     .union([z.enum(words as [Word, ...Word[]]), z.literal("")], "Choose one of the list.")
     .optional()
     .transform((word): Word | null => word || null);
+
+/** One of a list by its id, or none of it. */
+export const identifier = z
+  .union([z.uuid("Choose one of the list."), z.literal("")], "Choose one of the list.")
+  .optional()
+  .transform((id) => id || null);
 
 const yesOrNo = optionalChoice(["yes", "no"]).transform((word) => (word === null ? null : word === "yes"));
 
@@ -29,6 +36,26 @@ const times = z
       }),
     ),
   );
+
+/** A line of text that may be left blank, as null. */
+const optionalLine = (longest: number) =>
+  z
+    .string()
+    .trim()
+    .max(longest, `Keep it under ${longest} characters.`)
+    .optional()
+    .transform((line) => line || null);
+
+const temperatureProfile = z
+  .string()
+  .max(2000, "That is too long for a profile.")
+  .optional()
+  .transform((typed, context) => {
+    const read = readProfile(typed);
+    if (read.ok) return read.profile;
+    context.addIssue({ code: "custom", message: read.message });
+    return z.NEVER;
+  });
 
 const assumed = { source: "assumed" } as const;
 
@@ -50,12 +77,14 @@ export const stepHandling = z.object({
   thicknessVariation: optionalMeasured({ ...RULES.thicknessVariation, ...assumed }),
   bondFace: optionalChoice(["front", "back"]),
   bondThicknessVariation: optionalMeasured({ ...RULES.thicknessVariation, ...assumed }),
-  tapeName: z
-    .string()
-    .trim()
-    .max(120, "Keep it under 120 characters.")
-    .optional()
-    .transform((name) => name || null),
+  /** s, K; the step's peak and hold time follow from it */
+  profile: temperatureProfile,
+  sideUp: optionalChoice(FACES_UP),
+  machine: optionalLine(60),
+  recipe: optionalLine(120),
+  /** id of the piece of the carrier that is bonded */
+  carrierPiece: identifier,
+  tapeName: optionalLine(120),
   tapeTemperatureLimit: optionalMeasured({
     ...RULES.temperature,
     toleranceDimension: "temperatureDifference",

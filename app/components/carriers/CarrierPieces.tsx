@@ -7,6 +7,7 @@ import { DataTable, type Column } from "#app/components/ui/DataTable.tsx";
 import { ListHead } from "#app/components/ui/ListHead.tsx";
 import { Notice } from "#app/components/ui/Notice.tsx";
 import { sameWords } from "#app/components/forms/ChoiceField.tsx";
+import { formatMeasured } from "#app/lib/format-measured.ts";
 import {
   CARRIER_UNIT_STATES,
   usesLeft,
@@ -29,6 +30,20 @@ const columnsOf = (limit: number, mayEdit: boolean): Column<CarrierUnitRow>[] =>
   { key: "state", head: "State", sortable: true, cell: ({ state }) => state },
   { key: "uses", head: "Uses", numeric: true, sortable: true, cell: ({ uses }) => uses },
   { key: "left", head: "Left", wide: true, cell: (unit) => usesLeft(unit, limit) },
+  {
+    key: "variation",
+    head: "Variation",
+    wide: true,
+    cell: ({ thicknessVariation: measured }) =>
+      measured ? (
+        <>
+          {formatMeasured(measured, "length", { unit: "µm" })}
+          <span className="block text-label text-quiet">{measured.on}</span>
+        </>
+      ) : (
+        <span className="text-quiet">as its kind</span>
+      ),
+  },
   {
     key: "used",
     head: "Last use",

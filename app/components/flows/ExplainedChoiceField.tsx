@@ -11,10 +11,11 @@ interface Props {
   /** said while nothing is chosen */
   hint?: string;
   className?: string;
+  onChoose?: (id: string) => void;
 }
 
 /** A choice from the library; what matters of the one chosen stands below it. */
-export function ExplainedChoiceField({ field, label, choices, blank, hint, className }: Props) {
+export function ExplainedChoiceField({ field, label, choices, blank, hint, className, onChoose }: Props) {
   const [chosen, setChosen] = useState(field.initialValue ?? "");
   const words = choices.find(({ id }) => id === chosen)?.words;
   return (
@@ -25,7 +26,12 @@ export function ExplainedChoiceField({ field, label, choices, blank, hint, class
       blank={blank}
       hint={words ?? hint}
       className={className}
-      select={{ onChange: (event) => setChosen(event.currentTarget.value) }}
+      select={{
+        onChange: (event) => {
+          setChosen(event.currentTarget.value);
+          onChoose?.(event.currentTarget.value);
+        },
+      }}
     />
   );
 }

@@ -53,7 +53,7 @@ export function ExposureFields({ field, handling }: Props) {
                   label={`Time in ${exposure}`}
                   dimension="time"
                   example="5 min"
-                  hint="Blank: as long as the peak"
+                  hint="Blank: as long as the peak, or the whole profile"
                 />
               </div>
             )

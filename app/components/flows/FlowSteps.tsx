@@ -1,6 +1,8 @@
 import { useRef, type KeyboardEvent } from "react";
 import { Form, Link, useNavigation, useSearchParams, useSubmit } from "react-router";
 import { EmptyState } from "#app/components/ui/EmptyState.tsx";
+import { ListHead } from "#app/components/ui/ListHead.tsx";
+import { findSteps } from "#app/lib/find-steps.ts";
 import type { StepRow } from "#app/lib/flow-rows.ts";
 import { withParams } from "#app/lib/list-params.ts";
 import type { FlowHistory } from "#app/schemas/flow-plan.ts";
@@ -11,6 +13,9 @@ import { useStepDrag } from "./use-step-drag.ts";
 
 /** Id of the form through which every change of the steps goes; its buttons stand in the rows. */
 export const STEPS_FORM = "change-steps";
+
+/** A flow of fewer steps is seen at a glance. */
+const SEARCHED_FROM = 8;
 
 interface Props {
   flowId: string;
@@ -29,6 +34,8 @@ export function FlowSteps({ flowId, version, rows, history, mayEdit, fault }: Pr
   const form = useRef<HTMLFormElement>(null);
   const submit = useSubmit();
   const busy = useNavigation().state !== "idle";
+  const query = search.get("q")?.trim() ?? "";
+  const found = query === "" ? rows : findSteps(rows, query);
   const current = rows.find(({ id }) => id === search.get("step"));
   const openOrClose = ({ id }: StepRow) => withParams(search, { step: id === current?.id ? null : id, done: null });
   const { drag, handle } = useStepDrag((id, number) => {
@@ -60,14 +67,28 @@ export function FlowSteps({ flowId, version, rows, history, mayEdit, fault }: Pr
         </div>
       ) : (
         <div onKeyDown={mayEdit ? moveByKey : undefined}>
+          {(rows.length > SEARCHED_FROM || query !== "") && (
+            <div className="px-4 pt-4 tablet:px-6">
+              <ListHead what="steps">
+                {query !== "" && (
+                  <p className="py-1.5 text-quiet" role="status">
+                    {found.length} of {rows.length} steps.{" "}
+                    <Link to={withParams(search, { q: null })} preventScrollReset className="link">
+                      Show all
+                    </Link>
+                  </p>
+                )}
+              </ListHead>
+            </div>
+          )}
           <StepTable
             caption="Steps of the flow"
-            rows={rows}
+            rows={found}
             href={(row) => `/flows/${flowId}/steps/${row.id}`}
             current={current?.id}
             actions={mayEdit ? (row) => <StepActions row={row} of={rows.length} form={STEPS_FORM} /> : undefined}
             more={mayEdit ? openOrClose : undefined}
-            drag={mayEdit ? { handle, id: drag?.id ?? null, before: drag?.before ?? null } : undefined}
+            drag={mayEdit && query === "" ? { handle, id: drag?.id ?? null, before: drag?.before ?? null } : undefined}
             below={(row) =>
               fault?.step === row.number && (
                 <p className="font-semibold text-stop">Cannot be computed: {fault.reason}</p>

@@ -5,6 +5,7 @@ import { MeasuredField } from "#app/components/forms/MeasuredField.tsx";
 import { useInBrowser } from "#app/components/ui/use-in-browser.ts";
 import type { StepChoices } from "#app/lib/flow-step-choices.ts";
 import { inputsOf } from "#app/lib/flow-step-kinds.ts";
+import { CarrierPieceField } from "./CarrierPieceField.tsx";
 import { ExplainedChoiceField } from "./ExplainedChoiceField.tsx";
 import { FACES } from "./HandlingFields.tsx";
 import type { StepFormValues } from "./step-form-values.ts";
@@ -60,12 +61,7 @@ export function KindFields({ fields, kind, choices }: Props) {
       </KindGroup>
       <KindGroup needed={has.bond} title="Carrier and bond" className={SHOWN.bond}>
         <div className="grid gap-3 tablet:grid-cols-2">
-          <ExplainedChoiceField
-            field={fields.carrier}
-            label="Carrier"
-            choices={choices.carriers}
-            blank="Choose a carrier"
-          />
+          <CarrierPieceField carrier={fields.carrier} piece={handling.carrierPiece} choices={choices} />
           <ExplainedChoiceField
             field={fields.bondingMaterial}
             label="Bonding material"

@@ -5,17 +5,17 @@ import { ChoiceField, sameWords } from "#app/components/forms/ChoiceField.tsx";
 import { FormHead } from "#app/components/forms/FormHead.tsx";
 import { LineField } from "#app/components/forms/LineField.tsx";
 import { MeasuredField } from "#app/components/forms/MeasuredField.tsx";
-import { QuantityField } from "#app/components/forms/QuantityField.tsx";
 import { SubmitButton } from "#app/components/forms/SubmitButton.tsx";
 import { LEAVE, UnsavedGuard } from "#app/components/forms/UnsavedGuard.tsx";
 import { Notice } from "#app/components/ui/Notice.tsx";
 import { useRecordForm } from "#app/components/forms/use-record-form.ts";
 import { STEP_KINDS } from "#app/engine/flow/model.ts";
-import { HOLDINGS } from "#app/engine/vocabulary.ts";
+import { FACES_UP, HOLDINGS } from "#app/engine/vocabulary.ts";
 import type { StepChoices } from "#app/lib/flow-step-choices.ts";
 import { withParams } from "#app/lib/list-params.ts";
 import { ExplainedChoiceField } from "./ExplainedChoiceField.tsx";
 import { ExposureFields } from "./ExposureFields.tsx";
+import { HeatFields } from "./HeatFields.tsx";
 import { HandlingFields } from "./HandlingFields.tsx";
 import type { FlowConflict } from "#app/schemas/flow-plan.ts";
 import { KindFields } from "./KindFields.tsx";
@@ -62,6 +62,7 @@ function StepFields(props: FieldsProps) {
   const { values, version, choices, lastResult, conflict, back, next, refilled, onRefill } = props;
   const [form, fields] = useRecordForm<StepFormValues>({ lastResult, defaultValue: values });
   const [kind, setKind] = useState(fields.kind.initialValue);
+  const handling = fields.handling.getFieldset();
   const element = useRef<HTMLFormElement>(null);
   const draft = useStepDraft(element);
   const [search] = useSearchParams();
@@ -105,36 +106,38 @@ function StepFields(props: FieldsProps) {
           select={{ onChange: (event) => setKind(event.currentTarget.value) }}
         />
       </div>
-      <div className="grid gap-3 tablet:grid-cols-[1fr_1fr_2fr]">
-        <QuantityField
-          field={fields.peakTemperature}
-          label="Peak temperature"
-          dimension="temperature"
-          example="230 °C"
-        />
-        <QuantityField
-          field={fields.holdTime}
-          label="Time at peak"
-          dimension="time"
-          example="120 min"
-          hint="Blank: it does not matter"
-        />
-        <ExplainedChoiceField
-          field={fields.equipment}
-          label="Tool"
-          choices={choices.tools}
-          blank="Choose a tool"
-          hint="Without a tool its warp limit is not known"
-        />
+      <div className="grid items-start gap-3 tablet:grid-cols-2">
+        <HeatFields peak={fields.peakTemperature} hold={fields.holdTime} profile={handling.profile} />
+        <div className="grid grid-cols-2 gap-3">
+          <ExplainedChoiceField
+            field={fields.equipment}
+            label="Tool"
+            choices={choices.tools}
+            blank="Choose a tool"
+            hint="Without a tool its warp limit is not known"
+            className="col-span-2"
+          />
+          <LineField field={handling.machine} label="Which of them" hint="Of several alike: oven 3" />
+          <LineField field={handling.recipe} label="Recipe" hint="As the tool calls it" />
+        </div>
       </div>
       <div className="grid gap-x-3 gap-y-4 tablet:grid-cols-[1fr_2fr]">
-        <ChoiceField
-          field={fields.planned}
-          label="Held by, as planned"
-          choices={sameWords(HOLDINGS)}
-          blank="Choose"
-          hint="While this is done and when it leaves the tool"
-        />
+        <div className="space-y-3">
+          <ChoiceField
+            field={fields.planned}
+            label="Held by, as planned"
+            choices={sameWords(HOLDINGS)}
+            blank="Choose"
+            hint="While this is done and when it leaves the tool"
+          />
+          <ChoiceField
+            field={handling.sideUp}
+            label="Side up"
+            choices={sameWords(FACES_UP)}
+            blank="As it comes"
+            hint="Left open: as at the step before; bonding, mounting and debonding turn it as usual"
+          />
+        </div>
         <ExposureFields field={fields.exposures} handling={fields.handling} />
       </div>
       <MeasuredField

@@ -1,7 +1,11 @@
+import { ProfileDrawing } from "#app/components/drawings/ProfileDrawing.tsx";
 import { PropertyTable, type Property } from "#app/components/ui/PropertyTable.tsx";
 import type { Measured } from "#app/engine/measured.ts";
 import { formatQuantity } from "#app/engine/units/format.ts";
 import { stepHandlingWords } from "#app/lib/step-handling-words.ts";
+import { withPieceMark } from "#app/lib/carrier-units.ts";
+import { holdWords } from "#app/lib/run-words.ts";
+import { profileWords } from "#app/lib/temperature-profile.ts";
 import type { StepDetail } from "#app/schemas/flow-view.ts";
 
 /** A step for those who may not change it: everything of its form, to read. */
@@ -9,15 +13,16 @@ export function StepReading({ step }: { step: StepDetail }) {
   const words: [label: string, value: string | null][] = [
     ["Kind of step", step.kind],
     ["Peak temperature", formatQuantity(step.peakTemperature, "temperature", { unit: "°C" })],
-    ["Time at peak", step.holdTime === null ? null : formatQuantity(step.holdTime, "time")],
+    ["Time at peak", holdWords({ holdTime: step.holdTime, profile: step.handling.profile })],
     ["Tool", step.equipment?.name ?? "none chosen"],
     ["Exposed to", step.exposures.join(", ") || null],
     ["Held by, as planned", step.planned],
-    ["Carrier", step.carrier?.name ?? null],
+    ["Carrier", step.carrier && withPieceMark(step.carrier.name, step.carrier.identity)],
     ["Bonding material", step.bondingMaterial?.name ?? null],
     ...step.films.map(filmWords),
     ...stepHandlingWords(step.handling),
   ];
+  const { profile } = step.handling;
   const properties = measuredOf(step);
   return (
     <div className="frame min-w-0 space-y-4 p-4 tablet:p-6">
@@ -31,6 +36,7 @@ export function StepReading({ step }: { step: StepDetail }) {
           ),
         )}
       </dl>
+      {profile && <ProfileDrawing profile={profile} label={`Temperature profile: ${profileWords(profile)}`} />}
       {properties.length > 0 && <PropertyTable caption="Figures of the step" properties={properties} />}
     </div>
   );

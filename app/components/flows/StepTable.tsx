@@ -118,7 +118,7 @@ interface RowProps extends Pick<StepTableProps, "href" | "actions"> {
 }
 
 function Row({ row, href, current, actions, more, handle, look }: RowProps) {
-  const { number, title, kind, changes, peak, minutes, silicon, tool, exposures, planned, bond } = row;
+  const { number, title, kind, changes, peak, minutes, silicon, tool, run, sideUp, exposures, planned, bond } = row;
   const assumedWords = row.assumed && <span className="font-semibold text-caution"> assumed numbers</span>;
   const toolWords = tool ?? <span className="font-semibold text-caution">No tool chosen</span>;
   return (
@@ -147,7 +147,10 @@ function Row({ row, href, current, actions, more, handle, look }: RowProps) {
         )}
         <span className="block text-label text-quiet max-tablet:hidden">
           {kind}
-          <span className="wide:hidden">, {toolWords}</span>
+          <span className="wide:hidden">
+            , {toolWords}
+            {run && `, ${run}`}
+          </span>
           {exposures.length > 0 && <span className="wide:hidden">, {exposures.join(", ")}</span>}
           {assumedWords}
         </span>
@@ -156,6 +159,8 @@ function Row({ row, href, current, actions, more, handle, look }: RowProps) {
             {silicon.text} µm, {peak} °C{minutes && `, ${minutes}`}, {planned}
             {bond && `: ${noBreak(bond)}`}
             {tool === null && <>, {toolWords}</>}
+            {run && `, ${run}`}
+            {sideUp && `, ${sideUp} up`}
             {assumedWords}
           </p>
           <Changes changes={changes} />
@@ -178,15 +183,20 @@ function Row({ row, href, current, actions, more, handle, look }: RowProps) {
       <td className="num align-top max-tablet:hidden">
         {peak}
         {minutes && <span className="block text-label text-quiet">{minutes}</span>}
+        {row.profiled && <span className="block text-label text-quiet">profile</span>}
       </td>
       <td className={`num align-top max-tablet:hidden ${silicon.changed ? "font-semibold" : "text-quiet"}`}>
         {silicon.text}
       </td>
-      <td className="align-top max-wide:hidden">{toolWords}</td>
+      <td className="align-top max-wide:hidden">
+        {toolWords}
+        {run && <span className="block text-label text-quiet">{run}</span>}
+      </td>
       <td className="align-top text-quiet max-wide:hidden">{exposures.join(", ")}</td>
       <td className="align-top max-tablet:hidden">
         <span className="whitespace-nowrap">{planned}</span>
         {bond && <span className="block text-label text-quiet">{noBreak(bond)}</span>}
+        {sideUp && <span className="block text-label text-quiet">{sideUp} up</span>}
       </td>
       {actions && <td className="align-top max-tablet:hidden tablet:pr-4">{actions(row)}</td>}
     </tr>

@@ -17,6 +17,7 @@ export function WaferBeforePane({ wafer, number }: { wafer: WaferBefore | null; 
             <Films films={wafer.back} />
           </Part>
           <Part label="It is on">{wafer.on ?? "nothing: free"}</Part>
+          <Part label="Side up">{wafer.faceUp}</Part>
         </dl>
       ) : (
         <p className="mt-1 text-quiet">A step before this one leaves no silicon. Mend that one first.</p>

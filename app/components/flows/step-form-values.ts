@@ -42,7 +42,8 @@ export function stepFormValues(step: StepDetail): StepFormValues {
     title: step.title,
     kind: step.kind,
     peakTemperature: quantityText(step.peakTemperature, "temperature", "°C"),
-    holdTime: quantityText(step.holdTime, "time", "min"),
+    // Of a profile it is no figure to type.
+    holdTime: step.handling.profile ? "" : quantityText(step.holdTime, "time", "min"),
     equipment: step.equipment?.id ?? "",
     exposures: step.exposures,
     planned: step.planned,

@@ -1,4 +1,5 @@
 import { defineEntity, p, type InferEntity } from "@mikro-orm/core";
+import type { Measured } from "#app/engine/measured.ts";
 import type { CarrierUnitState } from "#app/lib/carrier-units.ts";
 import { Carrier } from "./carrier.ts";
 import { recordProperties } from "./record.ts";
@@ -17,6 +18,8 @@ export const CarrierUnit = defineEntity({
     state: p.text().$type<CarrierUnitState>(),
     /** ISO date; null until a use is counted here */
     lastUsedOn: p.date().nullable(),
+    /** as measured on this piece; null until it is, and that of its kind counts */
+    thicknessVariation: p.json<Measured>().nullable(),
     ...recordProperties,
   },
   uniques: [{ properties: ["carrier", "mark"] }],

@@ -7,6 +7,7 @@ import { LibraryForRules } from "./2026-12-04-library-for-rules.ts";
 import { AssessmentLot } from "./2026-12-05-assessment-lot.ts";
 import { PhysicsInputs } from "./2026-12-05-physics-inputs.ts";
 import { ImportProfiles } from "./2026-12-06-import-profiles.ts";
+import { CarrierPieceVariation } from "./2026-12-06-carrier-piece-variation.ts";
 
 /** Every migration in the order in which it runs. */
 export const migrations = [
@@ -19,4 +20,5 @@ export const migrations = [
   { name: "2026-12-05-assessment-lot", class: AssessmentLot },
   { name: "2026-12-05-physics-inputs", class: PhysicsInputs },
   { name: "2026-12-06-import-profiles", class: ImportProfiles },
+  { name: "2026-12-06-carrier-piece-variation", class: CarrierPieceVariation },
 ];

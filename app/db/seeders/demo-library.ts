@@ -73,7 +73,8 @@ export function addDemoLibrary(em: EntityManager): void {
       reuseLimit: carrier.reuseLimit,
       handling: BLANK_CARRIER_HANDLING,
     });
-    for (const piece of carrier.pieces ?? []) em.create(CarrierUnit, { ...delivered(), carrier: kind, ...piece });
+    for (const piece of carrier.pieces ?? [])
+      em.create(CarrierUnit, { ...delivered(), carrier: kind, thicknessVariation: null, ...piece });
   }
   for (const material of DEMO_BONDING_MATERIALS) {
     const property = (value: number, tolerance: number | null) => measured(value, tolerance, "supplier");

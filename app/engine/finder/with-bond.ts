@@ -1,4 +1,5 @@
 import type { BondingMaterialInput, CarrierInput, FlowInput, StepInput } from "../flow/model.ts";
+import { withPeak } from "../flow/temperature-profile.ts";
 import { tried } from "../trial/tried.ts";
 import type { BondSpan } from "./bond-spans.ts";
 
@@ -30,8 +31,7 @@ export function withBond(flow: FlowInput, span: BondSpan, choice: BondChoice): F
     ...flow,
     steps: flow.steps.map((step, index) => {
       if (index + 1 === span.from) return rebonded(step, choice, otherMaterial);
-      if (index + 1 === span.to && otherMaterial)
-        return { ...step, peakTemperature: choice.material.releaseTemperature.value };
+      if (index + 1 === span.to && otherMaterial) return withPeak(step, choice.material.releaseTemperature.value);
       return step;
     }),
   };
@@ -47,8 +47,13 @@ function rebonded(step: StepInput, choice: BondChoice, otherMaterial: boolean): 
     ? bond.thickness
     : tried(otherMaterial ? null : bond.thickness, choice.thickness, FINDER_NOTE);
   return {
-    ...step,
-    peakTemperature: otherMaterial ? material.bondTemperature.value : step.peakTemperature,
-    bond: { ...(sameLayer ? bond : rest), carrier, material, thickness },
+    ...(otherMaterial ? withPeak(step, material.bondTemperature.value) : step),
+    // The piece that is planned stays the same piece under another adhesive.
+    bond: {
+      ...(sameLayer ? bond : rest),
+      carrier: carrier.id === bond.carrier.id ? bond.carrier : carrier,
+      material,
+      thickness,
+    },
   };
 }

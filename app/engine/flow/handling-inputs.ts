@@ -117,6 +117,8 @@ export interface CarrierHandling {
   /** times that this piece has been bonded before */
   uses?: number | null;
   useLimit?: number | null;
+  /** why this piece is not to be used any more: 'scrapped'; missing: it is in use */
+  outOfUse?: string | null;
 }
 
 export interface BondingMaterialHandling {

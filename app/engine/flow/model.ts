@@ -1,7 +1,7 @@
 import type { ExpansionCurve } from "../laminate/expansion-curve.ts";
 import type { FilmPattern } from "../patterned/pattern.ts";
 import type { Measured } from "../measured.ts";
-import type { Exposure, Holding, Side } from "../vocabulary.ts";
+import type { Exposure, FaceUp, Holding, Side } from "../vocabulary.ts";
 import type {
   BondHandling,
   BondingMaterialHandling,
@@ -13,6 +13,7 @@ import type {
   StepHandling,
   WaferHandling,
 } from "./handling-inputs.ts";
+import type { TemperatureProfile } from "./temperature-profile.ts";
 
 /**
  * What a flow is made of, complete in itself: names, values and provenance are copied in, so a stored assessment can be
@@ -183,6 +184,13 @@ export interface StepInput extends StepHandling {
   peakTemperature: number;
   /** minutes at peak kept in seconds; null when it does not matter */
   holdTime: number | null;
+  /** how it gets hot and cools, where that is known: peak and hold time are the profile's own then. Missing: up to the peak and back */
+  profile?: TemperatureProfile | null;
+  /** side up on the tool; missing: as at the step before, turned where a step turns it */
+  sideUp?: FaceUp | null;
+  /** which of several machines, 'oven 3', and by which recipe it is done: said, not judged */
+  machine?: string | null;
+  recipe?: string | null;
   equipment: EquipmentInput | null;
   exposures: Exposure[];
   planned: Holding;

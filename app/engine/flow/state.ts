@@ -137,13 +137,35 @@ function bondsAfter(before: WaferState, step: StepInput): Pick<WaferState, "bond
 }
 
 /**
- * The face that is up once the step is planned as it is: the one away from the carrier, the back side on grinding tape. In a
- * transfer the carrier that stays lies below.
+ * The face that is usually up: the one away from the carrier, the back side on grinding tape, else the device side. In a transfer
+ * the carrier that stays lies below.
  */
-function faceUpAfter(step: StepInput, { bond, transfer }: Pick<WaferState, "bond" | "transfer">): FaceUp {
+function usualFaceUp(holding: Holding, { bond, transfer }: Pick<WaferState, "bond" | "transfer">): FaceUp {
   const lies = transfer ?? bond;
   if (lies) return bondedFace(lies) === "front" ? "back side" : "device side";
-  return step.planned === "grinding tape" ? "back side" : "device side";
+  return holding === "grinding tape" ? "back side" : "device side";
+}
+
+const TURNS: StepInput["kind"][] = ["bond", "debond", "laminate tape", "mount on frame"];
+
+/** Whether a step may turn the wafer while it is done, so that it is loaded as it came from the step before. */
+export function turnsIt({ kind }: Pick<StepInput, "kind">): boolean {
+  return TURNS.includes(kind);
+}
+
+/**
+ * The face that is up after a step: as stated, else as usual where the step bonds, debonds or puts it on tape or frame or another
+ * holder turns it, else as it was.
+ */
+function faceUpAfter(before: WaferState, step: StepInput, bonds: Pick<WaferState, "bond" | "transfer">): FaceUp {
+  const usual = usualFaceUp(step.planned, bonds);
+  const turned = turnsIt(step) || usual !== usualFaceUp(before.holding, before);
+  return step.sideUp ?? (turned ? usual : before.faceUp);
+}
+
+/** The face that is up as the wafer is loaded for a step: as it came, unless it is turned for a step that does not turn it itself. */
+export function faceUpLoaded(before: WaferState, step: StepInput): FaceUp {
+  return step.sideUp && !turnsIt(step) ? step.sideUp : before.faceUp;
 }
 
 const RELIEVES = ["stress relief", "polish", "via reveal"];
@@ -189,7 +211,7 @@ export function applyStep(before: WaferState, step: StepInput, field: string): W
     topography: step.topography ?? before.topography,
     diced: before.diced || step.kind === "dice",
     holding: step.planned,
-    faceUp: faceUpAfter(step, bonds),
+    faceUp: faceUpAfter(before, step, bonds),
   };
 }
 

@@ -9,6 +9,7 @@ import { lockedState, placeStack, settle, statedLayers, type Settled, type Settl
 import { lyingShape, type LyingShape } from "./shape.ts";
 import { unequalCurvature } from "./unequal.ts";
 import { applyStep, type WaferState } from "./state.ts";
+import { turningTemperatures } from "./temperature-profile.ts";
 
 type Wafer = FlowInput["wafer"];
 
@@ -29,7 +30,10 @@ export function heldFlat(holding: Holding): boolean {
   return FLAT_HOLDINGS.includes(holding);
 }
 
-/** What a step does to the wafer: it changes, is heated, and cools to 25 °C. */
+/**
+ * What a step does to the wafer: it changes, is heated, and cools to 25 °C. With a profile it settles wherever that turns; a bond is
+ * made and let go at the hottest of it.
+ */
 export function takeStep(
   wafer: Wafer,
   before: WaferState,
@@ -39,9 +43,23 @@ export function takeStep(
   const applied = applyStep(before, step, field);
   const flat = heldFlat(step.planned);
   const options = { metalHistory, heldFlat: flat };
-  const hot = settle(applied, step.peakTemperature, options);
-  const cooling = slides(applied.bond, step.peakTemperature) ? relock(before, hot, step, options) : hot.state;
-  const cold = step.peakTemperature === ROOM_TEMPERATURE ? hot : settle(cooling, ROOM_TEMPERATURE, options);
+  const places = turningTemperatures(step);
+  const hottest = places.indexOf(Math.max(...places));
+  const bonds = { bond: applied.bond, transfer: applied.transfer };
+  const rebonds = applied.bond !== before.bond;
+  let state = rebonds && hottest > 0 ? { ...applied, bond: before.bond, transfer: before.transfer } : applied;
+  let settled: Settled | null = null;
+  let hot: Settled | null = null;
+  for (const [at, temperature] of places.entries()) {
+    if (rebonds && at === hottest && at > 0) state = { ...state, ...bonds };
+    settled = settle(state, temperature, options);
+    if (at === hottest) hot = settled;
+    const next = places[at + 1];
+    const locks = slides(state.bond, temperature) && (next === undefined || !slides(state.bond, next));
+    state = locks ? relock(before, settled, step, options) : settled.state;
+  }
+  if (!hot || !settled) throw new Error("a step has a hottest moment");
+  const cold = settled.temperature === ROOM_TEMPERATURE ? settled : settle(state, ROOM_TEMPERATURE, options);
   return { after: cold.state, hot, cold, flat };
 }
 

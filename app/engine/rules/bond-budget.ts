@@ -1,4 +1,5 @@
 import type { BondingMaterialInput } from "../flow/model.ts";
+import { timeAbove, timesReached } from "../flow/temperature-profile.ts";
 import type { StepState } from "../flow/walk.ts";
 import { againstUpperLimit, reaches } from "./against-limit.ts";
 import type { Finding, RuleContext } from "./finding.ts";
@@ -26,22 +27,23 @@ export function bondBudget(context: RuleContext, state: StepState, material: Bon
   const findings: Finding[] = [];
   const from = celsius(context.limits.heatingFrom.value);
   if (thermalCycles) {
-    const outcome = againstUpperLimit(hot.length, thermalCycles.value, 0, "do not run");
+    const count = hot.reduce((sum, { step }) => sum + timesReached(step, context.limits.heatingFrom.value), 0);
+    const outcome = againstUpperLimit(count, thermalCycles.value, 0, "do not run");
     if (outcome !== "clear")
       findings.push(
         make(
           state,
           outcome,
-          `Heating ${hot.length} from ${from} up since the bond; ${name} stands ${thermalCycles.value}.`,
+          `Heating ${count} from ${from} up since the bond; ${name} stands ${thermalCycles.value}.`,
           {
             remedy: "Join hot steps, move one before the bond, or bond with a material that stands more.",
-            figures: [{ label: "Heatings since the bond", value: hot.length, unit: "1" }],
+            figures: [{ label: "Heatings since the bond", value: count, unit: "1" }],
             limit: statedLimit(`${name}, heatings`, thermalCycles, "1"),
           },
         ),
       );
   }
-  if (thermalTime) findings.push(...againstTime(state, hot, material, thermalTime, from));
+  if (thermalTime) findings.push(...againstTime(state, hot, material, thermalTime, context.limits.heatingFrom.value));
   return findings;
 }
 
@@ -50,10 +52,11 @@ function againstTime(
   hot: StepState[],
   { name }: BondingMaterialInput,
   most: NonNullable<BondingMaterialInput["thermalTime"]>,
-  from: string,
+  from: number,
 ): Finding[] {
-  const untimed = hot.filter(({ step }) => step.holdTime === null).map(({ number }) => number);
-  const total = hot.reduce((sum, { step }) => sum + (step.holdTime ?? 0), 0);
+  const times = hot.map(({ step, number }) => ({ number, time: timeAbove(step, from) }));
+  const untimed = times.filter(({ time }) => time === null).map(({ number }) => number);
+  const total = times.reduce((sum, { time }) => sum + (time ?? 0), 0);
   const limit = statedLimit(`${name}, total time hot`, most, "s");
   const figures: Finding["figures"] = [{ label: "Time hot since the bond", value: total, unit: "s" }];
   const outcome = againstUpperLimit(total, most.value, 0, "do not run");
@@ -72,10 +75,15 @@ function againstTime(
     ];
   if (outcome === "clear") return [];
   return [
-    make(state, outcome, `${duration(total)} from ${from} up since the bond; ${name} stands ${duration(most.value)}.`, {
-      remedy: "Shorten the hot steps, move one before the bond, or bond with a material that stands more.",
-      figures,
-      limit,
-    }),
+    make(
+      state,
+      outcome,
+      `${duration(total)} from ${celsius(from)} up since the bond; ${name} stands ${duration(most.value)}.`,
+      {
+        remedy: "Shorten the hot steps, move one before the bond, or bond with a material that stands more.",
+        figures,
+        limit,
+      },
+    ),
   ];
 }

@@ -1,5 +1,6 @@
 import type { Resistance, Resistances, SolventFamily } from "../flow/handling-inputs.ts";
 import type { StepInput } from "../flow/model.ts";
+import { heatDuration } from "../flow/temperature-profile.ts";
 import type { Exposure, Outcome } from "../vocabulary.ts";
 import { againstUpperLimit } from "./against-limit.ts";
 import { duration } from "./words.ts";
@@ -20,9 +21,9 @@ export function isDecided(exposure: Exposure): exposure is DecidedExposure {
   return exposure in DECIDED_BY;
 }
 
-/** How long an exposure lasts, s: as stated, else as long as the step is hot, else null. */
+/** How long an exposure lasts, s: as stated, else as long as the step is hot, its whole profile where it has one, else null. */
 export function exposureTime(step: StepInput, exposure: Exposure): number | null {
-  return step.exposureTimes?.[exposure] ?? step.holdTime;
+  return step.exposureTimes?.[exposure] ?? heatDuration(step);
 }
 
 export interface ResistanceFound {

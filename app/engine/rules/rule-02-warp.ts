@@ -1,5 +1,6 @@
 import { provenance } from "../measured.ts";
 import { edgesUp, type LyingShape } from "../flow/shape.ts";
+import { faceUpLoaded } from "../flow/state.ts";
 import type { StepState } from "../flow/walk.ts";
 import { standardBow } from "../stoney/bow.ts";
 import { formatQuantity, formatWithUncertainty } from "../units/format.ts";
@@ -31,7 +32,7 @@ function moments({ steps, uncertainty }: RuleContext, state: StepState): Moment[
     found.push({
       when: "as it is loaded",
       shape: previous.atRoom,
-      faceUp: previous.after.faceUp,
+      faceUp: faceUpLoaded(state.before, state.step),
       uncertainty: uncertainty[previous.number - 1]?.atRoom ?? null,
     });
   if (!shapeIsKnown(state.after)) return found;

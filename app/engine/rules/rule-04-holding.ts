@@ -2,7 +2,7 @@ import { chuckFlattening, type ChuckFlatteningInput } from "../chuck/chuck-flatt
 import { chuckSurfaceStressWorking } from "../chuck/working.ts";
 import type { EquipmentInput } from "../flow/model.ts";
 import { edgesUp, type LyingShape } from "../flow/shape.ts";
-import type { WaferState } from "../flow/state.ts";
+import { faceUpLoaded, type WaferState } from "../flow/state.ts";
 import type { StepState } from "../flow/walk.ts";
 import { siliconBiaxialModulus } from "../silicon/biaxial-modulus.ts";
 import { bendingStress } from "../strength/bending.ts";
@@ -34,7 +34,7 @@ function asLoaded({ steps }: RuleContext, state: StepState): Loaded | null {
   if (!previous?.atRoom || !shapeIsKnown(previous.after)) return null;
   return {
     shape: previous.atRoom,
-    rimLifts: edgesUp(previous.atRoom, previous.after.faceUp),
+    rimLifts: edgesUp(previous.atRoom, faceUpLoaded(state.before, state.step)),
     wafer: previous.after,
   };
 }

@@ -1,5 +1,6 @@
 import { provenance } from "../measured.ts";
 import { flowPoint, glassTransition } from "../flow/bond.ts";
+import { timeAbove } from "../flow/temperature-profile.ts";
 import type { StepState } from "../flow/walk.ts";
 import { formatQuantity } from "../units/format.ts";
 import type { Outcome } from "../vocabulary.ts";
@@ -61,12 +62,13 @@ function beyondHoldTime(
   margin: number,
   make: MakeFinding,
 ): Finding | null {
-  if (!limitTime || step.holdTime === null || !reaches(step.peakTemperature, temperatureLimit.value - margin))
-    return null;
-  if (!exceeds(step.holdTime, limitTime.value)) return null;
+  const from = temperatureLimit.value - margin;
+  if (!limitTime || !reaches(step.peakTemperature, from)) return null;
+  const time = timeAbove(step, from);
+  if (time === null || !exceeds(time, limitTime.value)) return null;
   return make(
     "do not run",
-    `${duration(step.holdTime)} near its limit; ${name} stands that for ${duration(limitTime.value)}.`,
+    `${duration(time)} near its limit; ${name} stands that for ${duration(limitTime.value)}.`,
     "Shorten the hold, lower the peak, or bond with a material that takes more.",
   );
 }

@@ -54,10 +54,25 @@ function diameter({ flow }: RuleContext, state: StepState, { carrier }: BondStat
   ];
 }
 
-function reuse(state: StepState, { carrier }: BondState): Finding[] {
-  const { uses, useLimit, identity } = carrier;
+/** How often a piece has been bonded earlier in the flow: its record does not know of that yet. */
+function bondedEarlier({ steps }: RuleContext, state: StepState, { id, identity }: BondState["carrier"]): number {
+  if (!identity) return 0;
+  return steps
+    .slice(0, state.number - 1)
+    .filter(({ step: { bond } }) => bond?.carrier.id === id && bond.carrier.identity === identity).length;
+}
+
+/** A piece that is named is told by its mark; what is said of it holds for the next time that it is bonded. */
+function reuse(context: RuleContext, state: StepState, { carrier }: BondState): Finding[] {
+  const { uses, useLimit, identity, outOfUse } = carrier;
+  if (outOfUse)
+    return [
+      make(state, "do not run", `${carrier.name}${identity ? `, ${identity}` : ""}, is out of use: ${outOfUse}.`, {
+        remedy: "Take another piece of this carrier.",
+      }),
+    ];
   if (typeof uses !== "number" || typeof useLimit !== "number") return [];
-  const use = uses + 1;
+  const use = uses + bondedEarlier(context, state, carrier) + 1;
   const outcome = againstUpperLimit(use, useLimit, 0, "do not run");
   return [
     make(state, outcome, `Use ${use} of ${carrier.name}${identity ? `, ${identity}` : ""}; it stands ${useLimit}.`, {
@@ -151,7 +166,7 @@ function judge(context: RuleContext, state: StepState): Finding[] {
     ? [
         ...(state.atRoom && !after.transfer ? pairBow(context, state, state.atRoom, made) : []),
         ...diameter(context, state, made),
-        ...reuse(state, made),
+        ...reuse(context, state, made),
       ]
     : [];
   return [

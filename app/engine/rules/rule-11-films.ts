@@ -1,6 +1,7 @@
 import type { FilmInput } from "../flow/model.ts";
 import { allFilms } from "../flow/state.ts";
 import type { StepState } from "../flow/walk.ts";
+import { timesReached } from "../flow/temperature-profile.ts";
 import { ROOM_TEMPERATURE } from "../laminate/layer.ts";
 import { outcomeRank } from "../vocabulary.ts";
 import { againstUpperLimit, exceeds, reaches } from "./against-limit.ts";
@@ -127,13 +128,14 @@ function solder(context: RuleContext, state: StepState): Finding[] {
 function counted(context: RuleContext, state: StepState, film: FilmInput, melting: number): Finding[] {
   const times = meltings(context, state, film, melting);
   if (times.at(-1) !== state) return [];
+  const count = times.reduce((sum, { step }) => sum + timesReached(step, melting), 0);
   const most = context.limits.mostReflows.value;
-  const outcome = againstUpperLimit(times.length, most, 0, "do not run");
+  const outcome = againstUpperLimit(count, most, 0, "do not run");
   if (outcome === "clear") return [];
   return [
-    make(state, outcome, `${film.name} melts for the ${ordinal(times.length)} time; at most ${most} are usual.`, {
+    make(state, outcome, `${film.name} melts for the ${ordinal(count)} time; at most ${most} are usual.`, {
       remedy: "Join reflows, or put the solder on later.",
-      figures: [{ label: "Times melted", value: times.length, unit: "1" }],
+      figures: [{ label: "Times melted", value: count, unit: "1" }],
       limit: siteLimit(context.limits, "mostReflows"),
     }),
   ];

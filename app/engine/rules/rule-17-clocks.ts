@@ -1,5 +1,6 @@
 import type { StepKind } from "../flow/model.ts";
 import { allFilms } from "../flow/state.ts";
+import { heatDuration } from "../flow/temperature-profile.ts";
 import type { StepState } from "../flow/walk.ts";
 import { againstUpperLimit, exceeds, reaches } from "./against-limit.ts";
 import type { Finding, FindingLimit, Rule, RuleContext } from "./finding.ts";
@@ -14,7 +15,7 @@ const make = findingsOf(17, TITLE);
 function elapsed(steps: readonly StepState[], from: StepState, to: StepState): { time: number; complete: boolean } {
   const between = steps.slice(from.number, to.number);
   const waits = between.map(({ step }) => step.timeSincePrevious ?? null);
-  const work = between.slice(0, -1).reduce((sum, { step }) => sum + (step.holdTime ?? 0), 0);
+  const work = between.slice(0, -1).reduce((sum, { step }) => sum + (heatDuration(step) ?? 0), 0);
   return {
     time: waits.reduce<number>((sum, wait) => sum + (wait ?? 0), work),
     complete: waits.every((wait) => wait !== null),

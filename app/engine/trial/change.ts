@@ -2,6 +2,7 @@ import { bondSpans } from "../finder/bond-spans.ts";
 import { withBond } from "../finder/with-bond.ts";
 import { ROOM_TEMPERATURE } from "../laminate/layer.ts";
 import type { FilmAddition, FlowInput, StepInput } from "../flow/model.ts";
+import { withPeak } from "../flow/temperature-profile.ts";
 import type { Holding } from "../vocabulary.ts";
 import type { Catalogue } from "./catalogue.ts";
 import { tried } from "./tried.ts";
@@ -85,7 +86,7 @@ function changedStep(step: StepInput, change: StepChange, { tools }: Catalogue):
     case "silicon after":
       return { ...step, siliconAfter: tried(step.siliconAfter, change.value, REMEDY_NOTE) };
     case "peak temperature":
-      return { ...step, peakTemperature: change.value };
+      return withPeak(step, change.value);
     case "bond thickness":
       return step.bond
         ? { ...step, bond: { ...step.bond, thickness: tried(step.bond.thickness, change.value, REMEDY_NOTE) } }

@@ -2,10 +2,12 @@ import { answerSentences } from "#app/engine/flow/answer.ts";
 import type { AssessedStep, FlowAssessment } from "#app/engine/flow/assess.ts";
 import type { FlowInput } from "#app/engine/flow/model.ts";
 import { edgesUp, type LyingShape } from "#app/engine/flow/shape.ts";
+import { faceUpLoaded } from "#app/engine/flow/state.ts";
 import type { SiteLimits } from "#app/engine/rules/limits.ts";
 import { warpWorking } from "#app/engine/rules/warp-working.ts";
 import { standardBow } from "#app/engine/stoney/bow.ts";
 import type { FaceUp } from "#app/engine/vocabulary.ts";
+import { given } from "#app/lib/given.ts";
 import type { AssessmentResult, BondResult, ShapeResult, StepResult } from "#app/schemas/assessment-result.ts";
 
 /** The engine's answer in the form in which it is stored: plain, with the standard bow. */
@@ -31,6 +33,7 @@ function stepResult({ state, required, outcome, uncertainty, budget }: AssessedS
   const shape = (lying: LyingShape | null, u: number | null) =>
     lying && { ...shapeResult(lying, u, after.faceUp), working: warpWorking(lying) };
   // Nothing holds a bare wafer: let go, it lies as it does.
+  const loaded = faceUpLoaded(before, step);
   const held = step.planned !== "bare";
   return {
     number: state.number,
@@ -39,6 +42,7 @@ function stepResult({ state, required, outcome, uncertainty, budget }: AssessedS
     peakTemperature: step.peakTemperature,
     holdTime: step.holdTime,
     exposures: step.exposures,
+    ...given({ profile: step.profile, machine: step.machine, recipe: step.recipe }),
     equipment: step.equipment && {
       name: step.equipment.name,
       edgesUp: step.equipment.warpLimitEdgesUp?.value ?? null,
@@ -52,6 +56,7 @@ function stepResult({ state, required, outcome, uncertainty, budget }: AssessedS
     plannedName: step.planned === "carrier" && after.bond ? after.bond.carrier.name : step.planned,
     required: required ?? "none fits",
     faceUp: after.faceUp,
+    ...(loaded === before.faceUp ? {} : { loadedFaceUp: loaded }),
     lies: state.lies,
     atRoom: shape(state.atRoom, uncertainty.atRoom),
     atPeak: shape(state.atPeak, uncertainty.atPeak),
@@ -98,6 +103,7 @@ function bondsOf(steps: AssessedStep[]): BondResult[] {
         fromStep: state.number,
         toStep: state.number,
         carrier: bond.carrier.name,
+        ...given({ piece: bond.carrier.identity }),
         carrierDiameter: bond.carrier.diameter,
         material: bond.material.name,
         thickness: bond.thickness.value,

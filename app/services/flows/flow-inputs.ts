@@ -1,4 +1,5 @@
 import type { BondingMaterial } from "#app/db/entities/bonding-material.ts";
+import type { CarrierUnit } from "#app/db/entities/carrier-unit.ts";
 import type { Carrier } from "#app/db/entities/carrier.ts";
 import type { Equipment } from "#app/db/entities/equipment.ts";
 import type { Film } from "#app/db/entities/film.ts";
@@ -12,10 +13,11 @@ import type {
   StepInput,
 } from "#app/engine/flow/model.ts";
 import { incomingFromBows } from "#app/engine/flow/silicon.ts";
-import { bondHandlingOf, stepHandlingOf } from "#app/lib/flow-handling.ts";
+import { bondHandlingOf, stepHandlingOf, stepRunOf } from "#app/lib/flow-handling.ts";
 import {
   bondingMaterialHandlingOf,
   carrierHandlingOf,
+  pieceHandlingOf,
   equipmentHandlingOf,
   filmHandlingOf,
 } from "#app/lib/library-handling.ts";
@@ -56,6 +58,11 @@ export function carrierInput({ id, name, material, ...carrier }: Carrier): Carri
     temperatureLimit: carrier.temperatureLimit,
     ...carrierHandlingOf(carrier),
   };
+}
+
+/** One piece of a kind of carrier: its mark, its uses and whether it may be used are its own. */
+export function pieceInput(carrier: Carrier, piece: CarrierUnit): CarrierInput {
+  return { ...carrierInput(carrier), ...pieceHandlingOf(piece) };
 }
 
 export function bondingMaterialInput({ id, name, ...material }: BondingMaterial): BondingMaterialInput {
@@ -146,6 +153,7 @@ function stepInputOf(step: StepDetail): StepInput {
         ? { carrier, material: bondingMaterial, thickness: bondThickness, ...bondHandlingOf(step.handling) }
         : null,
     groundFaceForce: step.groundFaceForce,
+    ...stepRunOf(step.handling),
     ...stepHandlingOf(step.handling),
   };
 }

@@ -2,6 +2,7 @@ import type { EntityManager } from "@mikro-orm/postgresql";
 import { FlowTemplate } from "#app/db/entities/flow-template.ts";
 import { completeStep } from "#app/lib/blank-step.ts";
 import { stepRows } from "#app/lib/flow-rows.ts";
+import { forLibrary } from "#app/lib/step-edits.ts";
 import { PAGE_SIZE, type ListPage, type ListParams } from "#app/lib/list-params.ts";
 import { mayOnSite } from "#app/policies/permissions.ts";
 import type { FlowTemplateDetail, FlowTemplateRow } from "#app/schemas/template-view.ts";
@@ -94,7 +95,7 @@ export async function keepFlow(scope: ActorScope, flowId: string): Promise<strin
         note: "",
         diameter: flow.silicon.diameter,
         incomingThickness: plan.incomingThickness,
-        steps: plan.steps.map(({ id: _id, ...step }) => step),
+        steps: plan.steps.map(({ id: _id, ...step }) => forLibrary(step)),
       });
       await em.flush();
       return kept.id;

@@ -9,7 +9,7 @@ import { FlowStepFilm } from "#app/db/entities/flow-step-film.ts";
 import { FlowStep } from "#app/db/entities/flow-step.ts";
 import type { Flow } from "#app/db/entities/flow.ts";
 import { Silicon } from "#app/db/entities/silicon.ts";
-import { completeStep } from "#app/lib/blank-step.ts";
+import { BLANK_HANDLING, completeStep } from "#app/lib/blank-step.ts";
 import type { FlowPlan, StepPlan } from "#app/schemas/flow-plan.ts";
 import type { StepValues } from "#app/schemas/flow.ts";
 import { notFound } from "#app/server/problem.server.ts";
@@ -92,7 +92,7 @@ function stepPlan(step: FlowStep, films: FlowStepFilm[]): StepPlan {
     bondingMaterial: step.bondingMaterial?.id ?? null,
     bondThickness: step.bondThickness ?? null,
     groundFaceForce: step.groundFaceForce ?? null,
-    handling: step.handling,
+    handling: { ...BLANK_HANDLING, ...step.handling },
     films: films.map(({ change, side, film, thickness, stress, coverage }) => ({
       change,
       side,

@@ -1,9 +1,11 @@
 import { BondingMaterial } from "#app/db/entities/bonding-material.ts";
+import { CarrierUnit } from "#app/db/entities/carrier-unit.ts";
 import { Carrier } from "#app/db/entities/carrier.ts";
 import { Equipment } from "#app/db/entities/equipment.ts";
 import { Film } from "#app/db/entities/film.ts";
 import { formatQuantity } from "#app/engine/units/format.ts";
 import { formatMeasured } from "#app/lib/format-measured.ts";
+import { sentenceCase } from "#app/lib/assessment-steps.ts";
 import type { StepChoices } from "#app/lib/flow-step-choices.ts";
 import { inScope, type ActorScope } from "#app/server/scope.server.ts";
 import { requireOnSite } from "../permission.server.ts";
@@ -63,10 +65,11 @@ function materialWords(material: BondingMaterial): string {
 export async function stepChoices(scope: ActorScope): Promise<StepChoices> {
   requireOnSite(scope, "see the library");
   const byName = { orderBy: { name: "asc" as const } };
-  const { films, tools, carriers, materials } = await inScope(scope, async (em) => ({
+  const { films, tools, carriers, pieces, materials } = await inScope(scope, async (em) => ({
     films: await em.find(Film, {}, { ...byName, fields: ["name", "stress"] }),
     tools: await em.find(Equipment, {}, byName),
     carriers: await em.find(Carrier, {}, byName),
+    pieces: await em.find(CarrierUnit, {}, { orderBy: { mark: "asc" }, populate: ["carrier"] }),
     materials: await em.find(BondingMaterial, {}, byName),
   }));
   return {
@@ -80,10 +83,26 @@ export async function stepChoices(scope: ActorScope): Promise<StepChoices> {
       return { id: tool.id, name: short, words };
     }),
     carriers: carriers.map((carrier) => ({ id: carrier.id, name: carrier.name, words: carrierWords(carrier) })),
+    pieces: pieces.map(({ id, mark, uses, state, carrier, thicknessVariation }) => ({
+      id,
+      mark,
+      carrier: carrier.id,
+      carrierName: carrier.name,
+      words: sentence([
+        sentenceCase(state),
+        `used ${uses} of ${carrier.reuseLimit} times`,
+        thicknessVariation ? `varies by ${um(thicknessVariation.value)}` : null,
+      ]),
+    })),
     materials: materials.map((material) => ({
       id: material.id,
       name: material.name,
       words: materialWords(material),
     })),
   };
+}
+
+/** The same for a step that is kept for every flow, which names no piece of a carrier. */
+export async function libraryStepChoices(scope: ActorScope): Promise<StepChoices> {
+  return { ...(await stepChoices(scope)), pieces: [] };
 }

@@ -1,16 +1,18 @@
 import type { EntityManager } from "@mikro-orm/postgresql";
 import { BondingMaterial } from "#app/db/entities/bonding-material.ts";
 import { Carrier } from "#app/db/entities/carrier.ts";
+import { CarrierUnit } from "#app/db/entities/carrier-unit.ts";
 import { Equipment } from "#app/db/entities/equipment.ts";
 import { Film } from "#app/db/entities/film.ts";
 import { stressRecordOf } from "#app/lib/library-handling.ts";
 import type { StepPlan } from "#app/schemas/flow-plan.ts";
 import type { StepDetail, StepFilmDetail } from "#app/schemas/flow-view.ts";
-import { bondingMaterialInput, carrierInput, equipmentInput, filmInput } from "./flow-inputs.ts";
+import { bondingMaterialInput, carrierInput, equipmentInput, filmInput, pieceInput } from "./flow-inputs.ts";
 
 interface Library {
   tools: Map<string, Equipment>;
   carriers: Map<string, Carrier>;
+  pieces: Map<string, CarrierUnit>;
   materials: Map<string, BondingMaterial>;
   films: Map<string, Film>;
 }
@@ -24,6 +26,7 @@ async function usedLibrary(em: EntityManager, steps: StepPlan[]): Promise<Librar
   return {
     tools: byId(await em.find(Equipment, named(steps.map(({ equipment }) => equipment)))),
     carriers: byId(await em.find(Carrier, named(steps.map(({ carrier }) => carrier)))),
+    pieces: byId(await em.find(CarrierUnit, named(steps.map(({ handling }) => handling.carrierPiece)))),
     materials: byId(await em.find(BondingMaterial, named(steps.map(({ bondingMaterial }) => bondingMaterial)))),
     films: byId(await em.find(Film, named(steps.flatMap(({ films }) => films.map(({ film }) => film))))),
   };
@@ -35,8 +38,15 @@ export async function stepDetails(em: EntityManager, steps: StepPlan[]): Promise
   return steps.map((step) => stepDetail(step, library));
 }
 
-function stepDetail(step: StepPlan, { tools, carriers, materials, films }: Library): StepDetail {
+/** The piece that a step names, as long as it is one of its carrier. */
+function pieceOf({ carrier, handling }: StepPlan, pieces: Library["pieces"]): CarrierUnit | null {
+  const piece = handling.carrierPiece === null ? undefined : pieces.get(handling.carrierPiece);
+  return piece && piece.carrier.id === carrier ? piece : null;
+}
+
+function stepDetail(step: StepPlan, { tools, carriers, pieces, materials, films }: Library): StepDetail {
   const { equipment, carrier, bondingMaterial, films: changes, ...typed } = step;
+  const piece = pieceOf(step, pieces);
   const found = <Entity, Input>(id: string | null, map: Map<string, Entity>, toInput: (entity: Entity) => Input) => {
     const entity = id === null ? undefined : map.get(id);
     return entity ? toInput(entity) : null;
@@ -44,7 +54,7 @@ function stepDetail(step: StepPlan, { tools, carriers, materials, films }: Libra
   return {
     ...typed,
     equipment: found(equipment, tools, equipmentInput),
-    carrier: found(carrier, carriers, carrierInput),
+    carrier: found(carrier, carriers, (entity) => (piece ? pieceInput(entity, piece) : carrierInput(entity))),
     bondingMaterial: found(bondingMaterial, materials, bondingMaterialInput),
     films: changes.flatMap(({ film: id, stress, thickness, coverage, ...change }): StepFilmDetail[] => {
       const film = films.get(id);

@@ -2,6 +2,7 @@ import type { EntityManager } from "@mikro-orm/postgresql";
 import { StepTemplate } from "#app/db/entities/step-template.ts";
 import { completeStep } from "#app/lib/blank-step.ts";
 import { PAGE_SIZE, type ListPage, type ListParams } from "#app/lib/list-params.ts";
+import { forLibrary } from "#app/lib/step-edits.ts";
 import { mayOnSite } from "#app/policies/permissions.ts";
 import type { StepValues } from "#app/schemas/flow.ts";
 import type { StepTemplateDetail, StepTemplateRow } from "#app/schemas/template-view.ts";
@@ -81,7 +82,7 @@ export async function saveStepTemplate(
   { id, version, step }: { id: string | null; version: number | null; step: StepValues },
 ): Promise<Saved> {
   requireOnSite(scope, "edit the step library");
-  const values = { name: step.title, kind: step.kind, step };
+  const values = { name: step.title, kind: step.kind, step: forLibrary(step) };
   return saving(() =>
     inScope(scope, (em) =>
       saveNamedRecord(em, StepTemplate as never, "step of the library", scope, { id, version, values }),
@@ -113,7 +114,7 @@ export async function keepStep(scope: ActorScope, flowId: string, stepId: string
         ...newRecord(scope),
         name: title,
         kind: step.kind,
-        step: { ...step, title },
+        step: forLibrary({ ...step, title }),
       });
       await em.flush();
       return kept.id;

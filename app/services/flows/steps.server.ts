@@ -1,10 +1,11 @@
 import { randomUUID } from "node:crypto";
+import { CarrierUnit } from "#app/db/entities/carrier-unit.ts";
 import { copyStep, MOST_STEPS, moveStep, putStep, removeStep, type PlanEdit } from "#app/lib/plan-edits.ts";
 import { stepDifferences } from "#app/lib/step-differences.ts";
 import type { FlowPlan } from "#app/schemas/flow-plan.ts";
 import type { StepValues } from "#app/schemas/flow.ts";
 import { notFound, problem } from "#app/server/problem.server.ts";
-import type { ActorScope } from "#app/server/scope.server.ts";
+import { inScope, type ActorScope } from "#app/server/scope.server.ts";
 import { changePlan, type FlowPlace, type FlowSaved } from "./change-flow.server.ts";
 import { removedStep, stepInHistory } from "./revisions.server.ts";
 import { stepChoices } from "./step-choices.server.ts";
@@ -14,6 +15,9 @@ function requireRoom({ steps }: FlowPlan, more: number): void {
     throw problem(400, `A flow holds at most ${MOST_STEPS} steps. Split it into two flows.`);
 }
 
+/** Why a step was not saved: what can keep any change of a flow from being saved, or a piece of another carrier. */
+export type StepSaved = FlowSaved | { outcome: "other piece" };
+
 /**
  * Adds a step before `position` (from 0), or changes the one named. One that somebody has removed in the meantime is put back where
  * it was, once the person has been told of it.
@@ -22,7 +26,8 @@ export async function saveStep(
   scope: ActorScope,
   place: FlowPlace & { stepId: string | null; position: number },
   values: StepValues,
-): Promise<FlowSaved> {
+): Promise<StepSaved> {
+  if (!(await isPieceOf(scope, values))) return { outcome: "other piece" };
   const saved = await changePlan(scope, place, async ({ em, plan }) => {
     const known = plan.steps.some(({ id }) => id === place.stepId);
     if (known && place.stepId !== null) return putStep(plan, place.stepId, values, 0);
@@ -36,6 +41,12 @@ export async function saveStep(
   const theirs = saved.now.steps.find(({ id }) => id === place.stepId);
   const step = theirs ? stepDifferences(values, theirs, await stepChoices(scope)) : "removed";
   return { ...saved, conflict: { ...saved.conflict, step } };
+}
+
+/** Whether the piece that a step names, if any, is one of the carrier that it names. */
+async function isPieceOf(scope: ActorScope, { carrier, handling: { carrierPiece: id } }: StepValues): Promise<boolean> {
+  if (id === null) return true;
+  return carrier !== null && (await inScope(scope, (em) => em.count(CarrierUnit, { id, carrier }))) > 0;
 }
 
 /** What can be done to a step by one press. `to` puts it at a place, from 1. */

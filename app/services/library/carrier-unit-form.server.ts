@@ -1,14 +1,16 @@
 import { data, redirect } from "react-router";
 import type { SubmissionResult } from "@conform-to/react";
 import { UNIT_CHANGES, type UnitAnswer, type UnitChange } from "#app/lib/carrier-units.ts";
+import { readQuantity } from "#app/lib/read-quantity.ts";
 import { carrierUnitSchema } from "#app/schemas/carrier-unit.ts";
+import { RULES } from "#app/schemas/ranges.ts";
 import { postedForm, versionOf } from "#app/server/form.server.ts";
 import { parseForm } from "#app/server/parse-form.server.ts";
 import { problem } from "#app/server/problem.server.ts";
 import type { ActorScope } from "#app/server/scope.server.ts";
 import { requireOnSite } from "../permission.server.ts";
 import { idFrom } from "../uuid.server.ts";
-import { addCarrierUnit, changeCarrierUnit } from "./carrier-units.server.ts";
+import { addCarrierUnit, changeCarrierUnit, measureCarrierUnit } from "./carrier-units.server.ts";
 import { LIBRARY } from "./kinds.server.ts";
 
 /**
@@ -41,12 +43,30 @@ async function changeUnit(
   formData: FormData,
   asked: FormDataEntryValue,
 ) {
+  if (asked === "measure") return measureUnit(scope, carrierId, back, formData);
   if (typeof asked !== "string" || !Object.hasOwn(UNIT_CHANGES, asked))
     throw problem(400, "That is nothing that can be done to a piece of a carrier.");
   const change = asked as UnitChange;
-  const piece = formData.get("piece");
-  const id = idFrom(typeof piece === "string" ? piece : undefined, "piece");
+  const id = pieceOf(formData);
   const saved = await changeCarrierUnit(scope, carrierId, { id, version: versionOf(formData), change });
+  if (saved.outcome === "saved") throw redirect(back);
+  return data({ lastResult: null, refused: refusal(saved) } satisfies UnitAnswer, { status: 409 });
+}
+
+const pieceOf = (formData: FormData) => {
+  const piece = formData.get("piece");
+  return idFrom(typeof piece === "string" ? piece : undefined, "piece");
+};
+
+/** Blank takes a measured variation away. */
+async function measureUnit(scope: ActorScope, carrierId: string, back: string, formData: FormData) {
+  const id = pieceOf(formData);
+  const typed = formData.get("variation");
+  const read = readQuantity(typeof typed === "string" ? typed : "", RULES.thicknessVariation);
+  if (!read.ok && !read.blank)
+    return data({ lastResult: null, refused: `Not saved: ${read.message}` } satisfies UnitAnswer, { status: 400 });
+  const variation = read.ok ? read.value : null;
+  const saved = await measureCarrierUnit(scope, carrierId, { id, version: versionOf(formData), variation });
   if (saved.outcome === "saved") throw redirect(back);
   return data({ lastResult: null, refused: refusal(saved) } satisfies UnitAnswer, { status: 409 });
 }

@@ -28,7 +28,15 @@ const SORTS: Record<string, string> = {
 
 function rowOf(unit: CarrierUnit): CarrierUnitRow {
   const { id, mark, uses, state } = unit;
-  return { id, mark, uses, state, lastUsedOn: unit.lastUsedOn ?? null, stamp: stampOf(unit) };
+  return {
+    id,
+    mark,
+    uses,
+    state,
+    lastUsedOn: unit.lastUsedOn ?? null,
+    thicknessVariation: unit.thicknessVariation ?? null,
+    stamp: stampOf(unit),
+  };
 }
 
 /** The pieces of a kind of carrier that an address asks for: searched by mark, filtered by state, sorted and paged. */
@@ -85,6 +93,7 @@ export async function addCarrierUnit(
         uses,
         state: uses === 0 ? "cleaned" : "in use",
         lastUsedOn: null,
+        thicknessVariation: null,
       });
       await em.flush();
       return { outcome: "saved", id: unit.id };
@@ -128,6 +137,31 @@ export async function changeCarrierUnit(
     }),
   );
   return impossible ?? saved;
+}
+
+/**
+ * Keeps the thickness variation (m) that was measured on a piece today; null takes it away, and that of its kind counts again.
+ * @throws 403 for a role that may not, 404 when there is no such piece of this carrier
+ */
+export async function measureCarrierUnit(
+  scope: ActorScope,
+  carrierId: string,
+  { id, version, variation }: { id: string; version: number | null; variation: number | null },
+): Promise<UnitChanged> {
+  requireOnSite(scope, LIBRARY.carrier.edit);
+  return saving(() =>
+    inScope(scope, async (em): Promise<Saved> => {
+      const unit = await findUnit(em, carrierId, id);
+      const conflict = conflictOf({ ...unit, name: unit.mark }, version);
+      if (conflict) return { outcome: "conflict", conflict };
+      const on = new Date().toISOString().slice(0, 10);
+      unit.thicknessVariation =
+        variation === null ? null : { value: variation, tolerance: null, source: "measured here", note: "", on };
+      touch(unit, scope);
+      await em.flush();
+      return { outcome: "saved", id };
+    }),
+  );
 }
 
 async function findUnit(em: EntityManager, carrierId: string, id: string): Promise<CarrierUnit> {

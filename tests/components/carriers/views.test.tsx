@@ -114,6 +114,7 @@ describe("the pieces of a carrier", () => {
     uses: 20,
     state: "cleaned",
     lastUsedOn: null,
+    thicknessVariation: null,
     stamp: { version: 3, updatedAt: "2026-11-18T08:00:00.000Z", updatedBy: "Mikael Lindqvist" },
   };
   const params = { query: "", sort: "mark", descending: false, page: 1, filters: {} };

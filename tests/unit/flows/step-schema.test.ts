@@ -187,3 +187,51 @@ describe("a flow's head", () => {
     expect(newFlowSchema.safeParse({ ...head, stack: "x" }).success).toBe(false);
   });
 });
+
+describe("how a step is run", () => {
+  const PROFILE = "0 25; 30 230; 60 230; 90 25";
+  const run = (handling: Record<string, unknown>, rest: Record<string, unknown> = {}) =>
+    stepSchema.parse(step({ handling, ...rest }));
+
+  it("takes peak and time at peak from a profile, whatever the fields say", () => {
+    const wanted = {
+      peakTemperature: expect.closeTo(503.15, 9) as number,
+      holdTime: expect.closeTo(1887.8, 1) as number,
+    };
+    expect(run({ profile: PROFILE }, { peakTemperature: "", holdTime: "" })).toMatchObject(wanted);
+    expect(run({ profile: PROFILE }, { holdTime: "5 min" })).toMatchObject(wanted);
+    expect(run({ profile: PROFILE }).handling.profile).toHaveLength(4);
+  });
+
+  it("asks for a peak where there is no profile, and says where a profile is wrong", () => {
+    expect(faults({ peakTemperature: "" })).toEqual({
+      peakTemperature: "Type the peak temperature. Blank is missing, not zero.",
+    });
+    expect(faults({ peakTemperature: "", handling: { profile: "0 25; 30,150" } })).toEqual({
+      "handling.profile": "Point 2: “30,150” is one number with decimals or two: type minutes, a blank and °C.",
+    });
+    expect(faults({ handling: { profile: "x".repeat(3000) } })).toHaveProperty(["handling.profile"]);
+  });
+
+  it("takes machine, recipe and side up, blank meaning nothing", () => {
+    expect(run({ machine: " oven 3 ", recipe: "", sideUp: "back side" }).handling).toMatchObject({
+      machine: "oven 3",
+      recipe: null,
+      sideUp: "back side",
+    });
+    expect(faults({ handling: { sideUp: "edge" } })).toEqual({ "handling.sideUp": "Choose one of the list." });
+    expect(faults({ handling: { machine: "m".repeat(61), recipe: "r".repeat(121) } })).toEqual({
+      "handling.machine": "Keep it under 60 characters.",
+      "handling.recipe": "Keep it under 120 characters.",
+    });
+  });
+
+  it("takes a piece of a carrier at a bond only", () => {
+    expect(faults({ handling: { carrierPiece: ID } })).toEqual({
+      "handling.carrierPiece": "Only a bond has it: leave it blank.",
+    });
+    expect(faults({ handling: { carrierPiece: "K-12" } })).toEqual({
+      "handling.carrierPiece": "Choose one of the list.",
+    });
+  });
+});

@@ -26,7 +26,13 @@ describe("the wafer as a step finds it", () => {
   );
 
   it("is bare silicon before the first step", () => {
-    expect(waferBefore(input, 0)).toEqual({ silicon: "725\u00a0±\u00a015\u00a0µm", front: [], back: [], on: null });
+    expect(waferBefore(input, 0)).toEqual({
+      silicon: "725\u00a0±\u00a015\u00a0µm",
+      front: [],
+      back: [],
+      on: null,
+      faceUp: "device side",
+    });
   });
 
   it("has its films outermost first on the device side, and what it is on", () => {

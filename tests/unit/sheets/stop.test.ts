@@ -89,4 +89,13 @@ describe("the reading that means stop", () => {
       "Over 500 µm edges down",
     ]);
   });
+
+  it("reads what is turned over for a step the other way round", () => {
+    const stops = step(1, 700e-6, 300e-6);
+    const next = step(2, 1e-6, 1000e-6);
+    const turned = { ...next, loadedFaceUp: stops.faceUp === "device side" ? "back side" : "device side" } as const;
+    expect(stopReadings([stops, next], "edgesUp", null)).toHaveLength(2);
+    expect(stopReadings([stops, turned], "edgesUp", null)).toEqual([{ limit: 300e-6, steps: [1, 2] }]);
+    expect(stopReadings([stops, turned], "edgesDown", null)).toHaveLength(2);
+  });
 });

@@ -5,7 +5,7 @@ import { PageHead } from "#app/components/layout/PageHead.tsx";
 import { stepSchema } from "#app/schemas/flow.ts";
 import { scopeOf } from "#app/server/contexts.server.ts";
 import { readForm, statusOf } from "#app/server/form.server.ts";
-import { stepChoices } from "#app/services/flows/step-choices.server.ts";
+import { libraryStepChoices } from "#app/services/flows/step-choices.server.ts";
 import { saveStepTemplate } from "#app/services/flows/step-library.server.ts";
 import { templateRefusal } from "#app/services/flows/template-refusal.server.ts";
 import { requireOnSite } from "#app/services/permission.server.ts";
@@ -16,7 +16,7 @@ export const meta: Route.MetaFunction = () => [{ title: "New step of the library
 export async function loader({ context }: Route.LoaderArgs) {
   const scope = scopeOf(context);
   requireOnSite(scope, "edit the step library");
-  return { choices: await stepChoices(scope) };
+  return { choices: await libraryStepChoices(scope) };
 }
 
 export async function action({ request, context }: Route.ActionArgs) {

@@ -7,7 +7,7 @@ import { PageHead } from "#app/components/layout/PageHead.tsx";
 import { stepSchema } from "#app/schemas/flow.ts";
 import { scopeOf } from "#app/server/contexts.server.ts";
 import { readForm, statusOf, versionOf } from "#app/server/form.server.ts";
-import { stepChoices } from "#app/services/flows/step-choices.server.ts";
+import { libraryStepChoices } from "#app/services/flows/step-choices.server.ts";
 import { getStepTemplate, removeStepTemplate, saveStepTemplate } from "#app/services/flows/step-library.server.ts";
 import { templateRefusal } from "#app/services/flows/template-refusal.server.ts";
 import { idFrom } from "#app/services/uuid.server.ts";
@@ -20,7 +20,7 @@ export const meta: Route.MetaFunction = ({ loaderData }) => [
 export async function loader({ context, params }: Route.LoaderArgs) {
   const scope = scopeOf(context);
   const template = await getStepTemplate(scope, params.templateId);
-  return { ...template, choices: template.mayEdit ? await stepChoices(scope) : null };
+  return { ...template, choices: template.mayEdit ? await libraryStepChoices(scope) : null };
 }
 
 export async function action({ request, context, params }: Route.ActionArgs) {
