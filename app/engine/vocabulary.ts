@@ -53,6 +53,11 @@ export type ShapeRegime = "linear" | "nonlinear" | "curled";
 /** Which side of the silicon a film is on. `front` is the device side. */
 export type Side = "front" | "back";
 
+/** What a side is called. */
+export const SIDE_NAMES = { front: "device side", back: "back side" } as const satisfies Record<Side, FaceUp>;
+
+export const otherSide = (side: Side): Side => (side === "front" ? "back" : "front");
+
 /** Conditions that a step exposes the wafer, its bond and its tape to. */
 export const EXPOSURES = [
   "vacuum",

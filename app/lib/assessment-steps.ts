@@ -43,12 +43,12 @@ export function stepRows(result: AssessmentResult): StepRow[] {
     stepRow(
       step,
       result.findings.filter((finding) => finding.step === step.number),
-      result.bonds.find(({ fromStep, toStep }) => fromStep <= step.number && step.number <= toStep) ?? null,
+      result.bonds.filter(({ fromStep, toStep }) => fromStep <= step.number && step.number <= toStep),
     ),
   );
 }
 
-function stepRow(step: StepResult, findings: Finding[], bond: BondResult | null): StepRow {
+function stepRow(step: StepResult, findings: Finding[], bonds: BondResult[]): StepRow {
   const { atRoom, faceUp, planned } = step;
   const [worst, ...others] = findings.filter(({ outcome }) => outcome !== "clear").sort(bySeverity);
   return {
@@ -63,7 +63,7 @@ function stepRow(step: StepResult, findings: Finding[], bond: BondResult | null)
     liesAs: atRoom && isRolled(atRoom) ? shapeText(atRoom) : step.lies,
     limitText: limitText(step),
     heldBy: sentenceCase(planned),
-    planned: planned === "bare" ? null : plannedInFull(step, bond),
+    planned: planned === "bare" ? null : plannedInFull(step, bonds),
     required: step.required,
     outcome: step.outcome,
     note: worst ? findingNote(worst) : null,
@@ -94,6 +94,7 @@ function limitText({ atRoom, equipment }: StepResult): string {
   return limit === null ? NONE : formatBare(limit, "length", "µm");
 }
 
-function plannedInFull(step: StepResult, bond: BondResult | null): string {
-  return step.planned === "carrier" && bond ? `${bond.carrier}, ${bond.material}` : sentenceCase(step.plannedName);
+function plannedInFull(step: StepResult, bonds: BondResult[]): string {
+  if (step.planned !== "carrier" || bonds.length === 0) return sentenceCase(step.plannedName);
+  return bonds.map(({ carrier, material }) => `${carrier}, ${material}`).join("; ");
 }

@@ -1,7 +1,8 @@
+import { spansOfKinds } from "#app/engine/finder/bond-spans.ts";
 import type { StepKind } from "#app/engine/flow/model.ts";
 import type { Measured } from "#app/engine/measured.ts";
 import { formatQuantity } from "#app/engine/units/format.ts";
-import type { Exposure, Holding, Side } from "#app/engine/vocabulary.ts";
+import { SIDE_NAMES, type Exposure, type Holding, type Side } from "#app/engine/vocabulary.ts";
 import { filmThicknessText, siliconText } from "./flow-thickness.ts";
 import { formatBare } from "./format-measured.ts";
 
@@ -23,6 +24,7 @@ export interface ShownStep {
   carrier: { name: string } | null;
   bondingMaterial: { name: string } | null;
   bondThickness: Measured | null;
+  handling?: { bondFace: Side | null; debondFace: Side | null };
   films: {
     change: "adds" | "removes";
     side: Side;
@@ -48,7 +50,7 @@ export interface StepRow {
   tool: string | null;
   exposures: Exposure[];
   planned: Holding;
-  /** the carrier that it is on after the step, with what bonds it at the step that bonds */
+  /** the carriers that it is on after the step, with what bonds one at the step that bonds */
   bond: string | null;
   /** some number of this step is assumed */
   assumed: boolean;
@@ -62,8 +64,6 @@ export interface StepChange {
   side: "device side" | "back side" | null;
 }
 
-const SIDES = { front: "device side", back: "back side" } as const;
-
 const length = (value: number, unit: string) => formatQuantity(value, "length", { unit });
 
 function filmChange({ change, side, film, thickness, coverage }: ShownStep["films"][number]): StepChange {
@@ -72,7 +72,7 @@ function filmChange({ change, side, film, thickness, coverage }: ShownStep["film
     thickness && filmThicknessText(thickness.value),
     change === "adds" && coverage < 1 ? formatQuantity(coverage, "fraction", { unit: "%" }) : null,
   ];
-  return { word: change, what: parts.filter(Boolean).join(", "), side: SIDES[side] };
+  return { word: change, what: parts.filter(Boolean).join(", "), side: SIDE_NAMES[side] };
 }
 
 function changesOf({ films, trimWidth, trimDepth }: ShownStep): StepChange[] {
@@ -96,24 +96,30 @@ function isAssumed(step: ShownStep): boolean {
   );
 }
 
-function bondWords({ carrier, bondingMaterial, bondThickness }: ShownStep): string {
-  return [carrier?.name, bondingMaterial?.name, bondThickness && length(bondThickness.value, "µm")]
-    .filter(Boolean)
-    .join(", ");
+function bondWords({ carrier, bondingMaterial, bondThickness, handling }: ShownStep): string {
+  const words = [carrier?.name, bondingMaterial?.name, bondThickness && length(bondThickness.value, "µm")];
+  return [...words, handling?.bondFace === "back" ? "on the back side" : null].filter(Boolean).join(", ");
 }
 
-/** The rows of the step table: silicon and carrier are carried on from step to step. */
+/** The carriers that the wafer is on after each step, by name; null where it is on none. */
+export function carriersAlong(steps: readonly ShownStep[]): (string | null)[] {
+  const spans = spansOfKinds(
+    steps.map(({ kind, carrier, handling }) => ({ kind: kind === "bond" && !carrier ? null : kind, ...handling })),
+  );
+  return steps.map((_, index) => {
+    const on = spans.filter(({ from, to }) => from <= index + 1 && (to === null || index + 1 < to));
+    return on.map(({ from }) => steps[from - 1]?.carrier?.name).join(" and ") || null;
+  });
+}
+
+/** The rows of the step table: silicon and carriers are carried on from step to step. */
 export function stepRows(steps: readonly ShownStep[], incoming: Measured): StepRow[] {
   let silicon = incoming;
-  let carrier: string | null = null;
+  const carriers = carriersAlong(steps);
   return steps.map((step, index) => {
     const changed = step.siliconAfter !== null;
     silicon = step.siliconAfter ?? silicon;
-    let bond = carrier;
-    if (step.kind === "bond" && step.carrier) {
-      carrier = step.carrier.name;
-      bond = bondWords(step);
-    } else if (step.kind === "debond") bond = carrier = null;
+    const bonds = step.kind === "bond" && step.carrier;
     return {
       id: step.id,
       number: index + 1,
@@ -126,7 +132,7 @@ export function stepRows(steps: readonly ShownStep[], incoming: Measured): StepR
       tool: step.equipment?.name ?? null,
       exposures: step.exposures,
       planned: step.planned,
-      bond,
+      bond: bonds ? bondWords(step) : (carriers[index] ?? null),
       assumed: isAssumed(step),
     };
   });

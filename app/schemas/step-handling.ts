@@ -49,6 +49,7 @@ export const stepHandling = z.object({
   viaProtrusion: optionalMeasured({ ...RULES.featureHeight, label: "height of the vias", ...assumed }),
   thicknessVariation: optionalMeasured({ ...RULES.thicknessVariation, ...assumed }),
   bondFace: optionalChoice(["front", "back"]),
+  debondFace: optionalChoice(["front", "back"]),
   bondThicknessVariation: optionalMeasured({ ...RULES.thicknessVariation, ...assumed }),
   tapeName: z
     .string()

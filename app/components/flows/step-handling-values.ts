@@ -38,6 +38,7 @@ export function stepHandlingText(handling: StepHandlingValues): StepHandlingText
     viaProtrusion: length(handling.viaProtrusion),
     thicknessVariation: length(handling.thicknessVariation),
     bondFace: handling.bondFace ?? "",
+    debondFace: handling.debondFace ?? "",
     bondThicknessVariation: length(handling.bondThicknessVariation),
     tapeName: handling.tapeName ?? "",
     tapeTemperatureLimit: measuredText(handling.tapeTemperatureLimit, "temperature", {

@@ -2,9 +2,10 @@ import { EngineInputError } from "../errors.ts";
 import { ROOM_TEMPERATURE } from "../laminate/layer.ts";
 import { balanceLayers } from "../laminate/solve-laminate.ts";
 import type { Holding } from "../vocabulary.ts";
-import { flowPoint, slides } from "./bond.ts";
+import { flowPoint, slidingBonds } from "./bond.ts";
 import { bendsUnequally, layersOf } from "./layers.ts";
 import type { FlowInput, StepInput } from "./model.ts";
+import { restOnPair } from "./second-bond.ts";
 import { lockedState, placeStack, settle, statedLayers, type Settled, type SettleOptions } from "./settle.ts";
 import { lyingShape, type LyingShape } from "./shape.ts";
 import { unequalCurvature } from "./unequal.ts";
@@ -39,38 +40,46 @@ export function takeStep(
   const applied = applyStep(before, step, field);
   const flat = heldFlat(step.planned);
   const options = { metalHistory, heldFlat: flat };
-  const hot = settle(applied, step.peakTemperature, options);
-  const cooling = slides(applied.bond, step.peakTemperature) ? relock(before, hot, step, options) : hot.state;
+  const second = before.bonds.length > 0 && applied.bonds.length > before.bonds.length;
+  const hot = settle(
+    second ? restOnPair(applied, step.peakTemperature, options) : applied,
+    step.peakTemperature,
+    options,
+  );
+  const cooling = second ? hot.state : relock(before, hot, step, options);
   const cold = step.peakTemperature === ROOM_TEMPERATURE ? hot : settle(cooling, ROOM_TEMPERATURE, options);
   return { after: cold.state, hot, cold, flat };
 }
 
 /**
- * A pair that has slid, cooled to where it locks. One that is bonded in this step is pressed flat while it cools, and rests flat
- * on the silicon; one that was bonded before locks as it lies, flat on a tool that holds it flat.
+ * A pair that has slid, cooled to where it locks; between two carriers, the one with the higher flow point first. One that is
+ * bonded in this step is pressed flat while it cools, and rests flat on the silicon; one that was bonded before locks as it lies,
+ * flat on a tool that holds it flat.
  */
 function relock(before: WaferState, hot: Settled, step: StepInput, options: SettleOptions): WaferState {
-  const from = hot.state.bond ? flowPoint(hot.state.bond.material) : null;
-  if (!before.bond || from === null) return hot.state;
+  if (before.bonds.length === 0) return hot.state;
   const flat = options.heldFlat || step.equipment?.atPeak === "held";
-  return lockedState(settle(hot.state, from, { ...options, heldFlat: flat }), flat);
+  const points = slidingBonds(hot.state.bonds, step.peakTemperature).map(({ material }) => flowPoint(material) ?? 0);
+  return [...new Set(points)]
+    .sort((a, b) => b - a)
+    .reduce((state, from) => lockedState(settle(state, from, { ...options, heldFlat: flat }), flat), hot.state);
 }
 
 /** Shape at 25 °C after the step as it lies on the tool; null when tape or frame holds it flat. */
 export function roomShape(wafer: Wafer, { after, cold, flat }: WalkedStep): LyingShape | null {
-  return flat ? null : settledShape(wafer, cold, after.bond !== null);
+  return flat ? null : settledShape(wafer, cold, after.bonds.length > 0);
 }
 
 /** Shape at the hottest of the step; null at room temperature or when tape or frame holds it flat. */
 export function peakShape(wafer: Wafer, { after, hot, flat }: WalkedStep): LyingShape | null {
-  return flat || hot.temperature <= ROOM_TEMPERATURE ? null : settledShape(wafer, hot, after.bond !== null);
+  return flat || hot.temperature <= ROOM_TEMPERATURE ? null : settledShape(wafer, hot, after.bonds.length > 0);
 }
 
 /** Shape at 25 °C as it would lie if nothing held it. */
 export function releasedShape(wafer: Wafer, { after, cold }: WalkedStep): LyingShape {
-  if (!after.bond) return settledShape(wafer, cold, false);
+  if (after.bonds.length === 0) return settledShape(wafer, cold, false);
   const temperature = ROOM_TEMPERATURE;
-  const stack = placeStack(layersOf(after, temperature, { carrier: false }), temperature);
+  const stack = placeStack(layersOf(after, temperature, []), temperature);
   const solution = balanceLayers(stack.placed);
   const unequal = bendsUnequally(after) ? unequalCurvature(stack, temperature, null) : undefined;
   return lyingShape(wafer, { layers: () => statedLayers(stack), solution, temperature, bonded: false, unequal });

@@ -193,7 +193,6 @@ describe("which bonding materials slide", () => {
     expect(slides(bond(thermoplastic()), T_F - 0.01)).toBe(false);
     expect(slides(bond(thermoplastic({ flowPoint: null })), celsius(250))).toBe(false);
     expect(slides(bond(thermoplastic({ flows: false })), celsius(250))).toBe(false);
-    expect(slides(null, celsius(250))).toBe(false);
   });
 
   it("lock at the flow point, else the glass transition, else the softening point, never above the bonding temperature", () => {
