@@ -120,12 +120,15 @@ function stressed(
   );
 }
 
+/** Curvature, 1/m, of what is flat but for rounding, such as a wafer between two carriers that are alike: 10 pm over a wafer. */
+const FLAT = 1e-9;
+
 /** A stiff sphere of twice the curvature would still be clear: then the chuck's contact is not worth its time. */
 function farFromBreaking({ shape, wafer }: Loaded, radius: number, limits: SiteLimits): boolean {
-  if (shape.sagitta === 0) return true;
   const { limit, margin } = stressLimit(wafer, limits);
   const thickness = Math.max(shape.disc.thickness, wafer.silicon.value);
   const curvature = Math.max((2 * Math.abs(shape.sagitta)) / radius ** 2, 1 / (shape.rollRadius ?? Infinity));
+  if (curvature < FLAT) return true;
   if (2 * curvature * thickness > 1) return false;
   const stress = bendingStress({ thickness, radiusOfCurvature: 1 / (2 * curvature), direction: "biaxial" });
   return stress < limit.value - margin;
