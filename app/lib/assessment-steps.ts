@@ -6,6 +6,7 @@ import { celsius, micrometres } from "./assessment-figure.ts";
 import { bySeverity, findingNote } from "./assessment-finding.ts";
 import { shapeText } from "./assessment-shape.ts";
 import { formatBare, withoutUnit } from "./format-measured.ts";
+import { BOTH_CARRIERS } from "./flow-rows.ts";
 import { isRolled, lyingAs } from "./lying-as.ts";
 import { SHORT_STEP_NAMES } from "./step-names.ts";
 
@@ -95,6 +96,7 @@ function limitText({ atRoom, equipment }: StepResult): string {
 }
 
 function plannedInFull(step: StepResult, bonds: BondResult[]): string {
-  if (step.planned !== "carrier" || bonds.length === 0) return sentenceCase(step.plannedName);
-  return bonds.map(({ carrier, material }) => `${carrier}, ${material}`).join("; ");
+  const [bond, other] = bonds;
+  if (step.planned !== "carrier" || !bond) return sentenceCase(step.plannedName);
+  return other ? sentenceCase(BOTH_CARRIERS) : `${bond.carrier}, ${bond.material}`;
 }

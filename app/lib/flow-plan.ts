@@ -1,6 +1,6 @@
 import type { Measured } from "#app/engine/measured.ts";
 import { formatBare } from "./format-measured.ts";
-import { carriersAlong, type ShownStep } from "./flow-rows.ts";
+import { BOTH_CARRIERS, carriersAlong, type ShownStep } from "./flow-rows.ts";
 import { SHORT_STEP_NAMES } from "./step-names.ts";
 
 /** The columns of a drawn plan: silicon is carried on from step to step, carriers go by their names. */
@@ -9,7 +9,9 @@ export function planColumns(steps: readonly ShownStep[], incoming: Measured) {
   const carriers = carriersAlong(steps);
   return steps.map((step, index) => {
     silicon = step.siliconAfter?.value ?? silicon;
-    const planned = (step.planned === "carrier" && carriers[index]) || step.planned;
+    const [carrier, other] = carriers[index] ?? [];
+    const named = other ? BOTH_CARRIERS : carrier;
+    const planned = (step.planned === "carrier" && named) || step.planned;
     return {
       number: index + 1,
       name: step.title,

@@ -101,14 +101,17 @@ function bondWords({ carrier, bondingMaterial, bondThickness, handling }: ShownS
   return [...words, handling?.bondFace === "back" ? "on the back side" : null].filter(Boolean).join(", ");
 }
 
-/** The carriers that the wafer is on after each step, by name; null where it is on none. */
-export function carriersAlong(steps: readonly ShownStep[]): (string | null)[] {
+/** What holds a wafer between two carriers, where there is no room for both names. */
+export const BOTH_CARRIERS = "both carriers";
+
+/** The carriers that the wafer is on after each step, by name. */
+export function carriersAlong(steps: readonly ShownStep[]): string[][] {
   const spans = spansOfKinds(
     steps.map(({ kind, carrier, handling }) => ({ kind: kind === "bond" && !carrier ? null : kind, ...handling })),
   );
   return steps.map((_, index) => {
     const on = spans.filter(({ from, to }) => from <= index + 1 && (to === null || index + 1 < to));
-    return on.map(({ from }) => steps[from - 1]?.carrier?.name).join(" and ") || null;
+    return on.flatMap(({ from }) => steps[from - 1]?.carrier?.name ?? []);
   });
 }
 
@@ -132,7 +135,7 @@ export function stepRows(steps: readonly ShownStep[], incoming: Measured): StepR
       tool: step.equipment?.name ?? null,
       exposures: step.exposures,
       planned: step.planned,
-      bond: bonds ? bondWords(step) : (carriers[index] ?? null),
+      bond: bonds ? bondWords(step) : carriers[index]?.join(" and ") || null,
       assumed: isAssumed(step),
     };
   });

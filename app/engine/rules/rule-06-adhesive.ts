@@ -5,7 +5,7 @@ import { formatQuantity } from "../units/format.ts";
 import type { Outcome } from "../vocabulary.ts";
 import { bondBudget } from "./bond-budget.ts";
 import { bondChemistry } from "./bond-chemistry.ts";
-import { bondsStaying } from "./bonded.ts";
+import { bondsAsked, bondsStaying } from "./bonded.ts";
 import { againstUpperLimit, exceeds, reaches } from "./against-limit.ts";
 import type { Finding, Rule, RuleContext } from "./finding.ts";
 import { celsius, duration } from "./words.ts";
@@ -14,7 +14,7 @@ const TITLE = "Bonding material";
 
 /** The bonds that the step acts on: those that it comes with, not the one that it makes or lets go. */
 function judge(context: RuleContext, state: StepState): Finding[] {
-  return bondsStaying(state).flatMap((bond) => judgeBond(context, state, bond));
+  return bondsAsked(context, state, bondsStaying(state)).flatMap((bond) => judgeBond(context, state, bond));
 }
 
 function judgeBond(context: RuleContext, state: StepState, bond: BondState): Finding[] {

@@ -5,7 +5,7 @@ import { bondLetGo } from "../flow/state.ts";
 import type { StepState } from "../flow/walk.ts";
 import { standardBow } from "../stoney/bow.ts";
 import { againstUpperLimit, exceeds } from "./against-limit.ts";
-import { bondMade } from "./bonded.ts";
+import { bondMade, bondsAsked } from "./bonded.ts";
 import type { Finding, Rule, RuleContext } from "./finding.ts";
 import { findingsOf, siteLimit, statedLimit, temperatureFigure } from "./make-finding.ts";
 import { releasePath } from "./release-path.ts";
@@ -154,25 +154,26 @@ function printThrough({ limits }: RuleContext, state: StepState, { carrier }: Bo
 function judge(context: RuleContext, state: StepState): Finding[] {
   const { step, before } = state;
   const made = bondMade(state);
-  const bonds = made ? [...before.bonds, made] : before.bonds;
+  const all = made ? [...before.bonds, made] : before.bonds;
+  const bonds = bondsAsked(context, state, all);
   // What holds it from below is what was bonded last.
-  const below = bonds.at(-1);
-  if (!below) return [];
-  const atBond = made
-    ? [
-        ...(state.atRoom ? pairBow(context, state, state.atRoom, made) : []),
-        ...diameter(context, state, made),
-        ...reuse(state, made),
-      ]
-    : [];
+  const below = all.slice(-1).filter((bond) => bonds.includes(bond));
+  const atBond =
+    made && bonds.includes(made)
+      ? [
+          ...(state.atRoom ? pairBow(context, state, state.atRoom, made) : []),
+          ...diameter(context, state, made),
+          ...reuse(state, made),
+        ]
+      : [];
   const released = bondLetGo(before, step);
   return [
     ...atBond,
     ...bonds.flatMap((bond) => heat(state, bond)),
-    ...clamping(state, below),
+    ...below.flatMap((bond) => clamping(state, bond)),
     ...bonds.flatMap((bond) => sensing(state, bond)),
     ...bonds.flatMap((bond) => printThrough(context, state, bond)),
-    ...(released ? releasePath(state, released) : []),
+    ...(released && bonds.includes(released) ? releasePath(state, released) : []),
   ];
 }
 
