@@ -44,7 +44,7 @@ export type SourceKind = (typeof SOURCE_KINDS)[number];
 export const SHAPE_WORDS = ["flat", "edges up", "edges down", "saddle", "rolls up", "held"] as const;
 export type ShapeWord = (typeof SHAPE_WORDS)[number];
 
-/** Which face is up on the tool: the pair lies carrier down from bond to debond, so its back side is up. */
+/** Which face is up on the tool: from bond to debond the one away from the carrier that the wafer lies on. */
 export type FaceUp = "device side" | "back side";
 
 /** Regime of a free wafer's shape: small bow, bow beyond the linear range, rolled about one axis. */

@@ -10,7 +10,7 @@ export function planColumns(steps: readonly ShownStep[], incoming: Measured) {
   return steps.map((step, index) => {
     silicon = step.siliconAfter?.value ?? silicon;
     const [carrier, other] = carriers[index] ?? [];
-    const named = other ? BOTH_CARRIERS : carrier;
+    const named = other ? BOTH_CARRIERS : carrier?.name;
     const planned = (step.planned === "carrier" && named) || step.planned;
     return {
       number: index + 1,

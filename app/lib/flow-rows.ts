@@ -58,7 +58,7 @@ export interface StepRow {
 
 /** What a step adds to the wafer or takes off it. */
 export interface StepChange {
-  word: "adds" | "removes" | "trims";
+  word: "adds" | "removes" | "trims" | "lets go";
   /** 'Plated copper A, 5 µm, 35 %' */
   what: string;
   side: "device side" | "back side" | null;
@@ -75,7 +75,11 @@ function filmChange({ change, side, film, thickness, coverage }: ShownStep["film
   return { word: change, what: parts.filter(Boolean).join(", "), side: SIDE_NAMES[side] };
 }
 
-function changesOf({ films, trimWidth, trimDepth }: ShownStep): StepChange[] {
+/** `before`: the carriers that the wafer comes on. */
+function changesOf(
+  { kind, films, trimWidth, trimDepth, handling }: ShownStep,
+  before: readonly OnCarrier[],
+): StepChange[] {
   const trim: StepChange[] =
     trimWidth && trimDepth
       ? [
@@ -86,7 +90,9 @@ function changesOf({ films, trimWidth, trimDepth }: ShownStep): StepChange[] {
           },
         ]
       : [];
-  return [...trim, ...films.map(filmChange)];
+  const gone = kind === "debond" ? before.find(({ face }) => face === handling?.debondFace) : undefined;
+  const letGo: StepChange[] = gone ? [{ word: "lets go", what: gone.name, side: SIDE_NAMES[gone.face] }] : [];
+  return [...trim, ...films.map(filmChange), ...letGo];
 }
 
 function isAssumed(step: ShownStep): boolean {
@@ -104,14 +110,22 @@ function bondWords({ carrier, bondingMaterial, bondThickness, handling }: ShownS
 /** What holds a wafer between two carriers, where there is no room for both names. */
 export const BOTH_CARRIERS = "both carriers";
 
-/** The carriers that the wafer is on after each step, by name. */
-export function carriersAlong(steps: readonly ShownStep[]): string[][] {
+interface OnCarrier {
+  name: string;
+  face: Side;
+}
+
+/** The carriers that the wafer is on after each step, by name and face. */
+export function carriersAlong(steps: readonly ShownStep[]): OnCarrier[][] {
   const spans = spansOfKinds(
     steps.map(({ kind, carrier, handling }) => ({ kind: kind === "bond" && !carrier ? null : kind, ...handling })),
   );
   return steps.map((_, index) => {
     const on = spans.filter(({ from, to }) => from <= index + 1 && (to === null || index + 1 < to));
-    return on.flatMap(({ from }) => steps[from - 1]?.carrier?.name ?? []);
+    return on.flatMap(({ from, face }) => {
+      const name = steps[from - 1]?.carrier?.name;
+      return name === undefined ? [] : [{ name, face }];
+    });
   });
 }
 
@@ -128,14 +142,14 @@ export function stepRows(steps: readonly ShownStep[], incoming: Measured): StepR
       number: index + 1,
       title: step.title,
       kind: step.kind,
-      changes: changesOf(step),
+      changes: changesOf(step, carriers[index - 1] ?? []),
       peak: formatBare(step.peakTemperature, "temperature", "°C"),
       minutes: step.holdTime === null ? null : formatQuantity(step.holdTime, "time"),
       silicon: { text: siliconText(silicon), changed },
       tool: step.equipment?.name ?? null,
       exposures: step.exposures,
       planned: step.planned,
-      bond: bonds ? bondWords(step) : carriers[index]?.join(" and ") || null,
+      bond: bonds ? bondWords(step) : carriers[index]?.map(({ name }) => name).join(" and ") || null,
       assumed: isAssumed(step),
     };
   });
