@@ -44,7 +44,7 @@ export type SourceKind = (typeof SOURCE_KINDS)[number];
 export const SHAPE_WORDS = ["flat", "edges up", "edges down", "saddle", "rolls up", "held"] as const;
 export type ShapeWord = (typeof SHAPE_WORDS)[number];
 
-/** Which face is up on the tool: the pair lies carrier down from bond to debond, so its back side is up. */
+/** Which face is up on the tool: from bond to debond usually the one away from the carrier that the wafer lies on. */
 export const FACES_UP = ["device side", "back side"] as const;
 export type FaceUp = (typeof FACES_UP)[number];
 
@@ -53,6 +53,11 @@ export type ShapeRegime = "linear" | "nonlinear" | "curled";
 
 /** Which side of the silicon a film is on. `front` is the device side. */
 export type Side = "front" | "back";
+
+/** What a side is called. */
+export const SIDE_NAMES = { front: "device side", back: "back side" } as const satisfies Record<Side, FaceUp>;
+
+export const otherSide = (side: Side): Side => (side === "front" ? "back" : "front");
 
 /** Conditions that a step exposes the wafer, its bond and its tape to. */
 export const EXPOSURES = [

@@ -6,6 +6,7 @@ import { celsius, micrometres } from "./assessment-figure.ts";
 import { bySeverity, findingNote } from "./assessment-finding.ts";
 import { shapeText } from "./assessment-shape.ts";
 import { formatBare, withoutUnit } from "./format-measured.ts";
+import { BOTH_CARRIERS } from "./flow-rows.ts";
 import { isRolled, lyingAs } from "./lying-as.ts";
 import { SHORT_STEP_NAMES } from "./step-names.ts";
 
@@ -43,12 +44,12 @@ export function stepRows(result: AssessmentResult): StepRow[] {
     stepRow(
       step,
       result.findings.filter((finding) => finding.step === step.number),
-      result.bonds.find(({ fromStep, toStep }) => fromStep <= step.number && step.number <= toStep) ?? null,
+      result.bonds.filter(({ fromStep, toStep }) => fromStep <= step.number && step.number <= toStep),
     ),
   );
 }
 
-function stepRow(step: StepResult, findings: Finding[], bond: BondResult | null): StepRow {
+function stepRow(step: StepResult, findings: Finding[], bonds: BondResult[]): StepRow {
   const { atRoom, faceUp, planned } = step;
   const [worst, ...others] = findings.filter(({ outcome }) => outcome !== "clear").sort(bySeverity);
   return {
@@ -63,7 +64,7 @@ function stepRow(step: StepResult, findings: Finding[], bond: BondResult | null)
     liesAs: atRoom && isRolled(atRoom) ? shapeText(atRoom) : step.lies,
     limitText: limitText(step),
     heldBy: sentenceCase(planned),
-    planned: planned === "bare" ? null : plannedInFull(step, bond),
+    planned: planned === "bare" ? null : plannedInFull(step, bonds),
     required: step.required,
     outcome: step.outcome,
     note: worst ? findingNote(worst) : null,
@@ -94,6 +95,8 @@ function limitText({ atRoom, equipment }: StepResult): string {
   return limit === null ? NONE : formatBare(limit, "length", "µm");
 }
 
-function plannedInFull(step: StepResult, bond: BondResult | null): string {
-  return step.planned === "carrier" && bond ? `${bond.carrier}, ${bond.material}` : sentenceCase(step.plannedName);
+function plannedInFull(step: StepResult, bonds: BondResult[]): string {
+  const [bond, other] = bonds;
+  if (step.planned !== "carrier" || !bond) return sentenceCase(step.plannedName);
+  return other ? sentenceCase(BOTH_CARRIERS) : `${bond.carrier}, ${bond.material}`;
 }

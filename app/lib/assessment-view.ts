@@ -4,7 +4,7 @@ import type { AssumedInput } from "#app/engine/flow/assess.ts";
 import type { ReleaseMethod } from "#app/engine/flow/model.ts";
 import type { Finding } from "#app/engine/rules/finding.ts";
 import { formatWithUncertainty } from "#app/engine/units/format.ts";
-import type { Outcome } from "#app/engine/vocabulary.ts";
+import { SIDE_NAMES, type FaceUp, type Outcome } from "#app/engine/vocabulary.ts";
 import type { AssessmentResult, BondResult, StepResult } from "#app/schemas/assessment-result.ts";
 import type { LotRecord } from "#app/schemas/lot.ts";
 import { withPieceMark } from "./carrier-units.ts";
@@ -54,6 +54,8 @@ export interface RemedyView {
 
 export interface BondView {
   steps: string;
+  /** the face that is bonded; null where every bond of the flow is by the device side, as is usual */
+  face: FaceUp | null;
   carrier: string;
   material: string;
   thickness: string;
@@ -100,7 +102,7 @@ export function assessmentView(head: AssessmentHead, result: AssessmentResult, a
     remedies: remedies(result.findings),
     assumed: result.assumed,
     inputs: result.inputs,
-    bonds: result.bonds.map(bondView),
+    bonds: result.bonds.map((bond) => bondView(bond, result.bonds)),
     titleBlock: titleBlock(head, "Assessment", "1 of 1"),
   };
 }
@@ -182,8 +184,14 @@ function remedies(findings: Finding[]): RemedyView[] {
   return [...found.values()].map((each) => ({ ...each, steps: each.steps.sort((a, b) => a - b) }));
 }
 
-function bondView(bond: BondResult): BondView {
+/** The face of a bond where that has to be said: as soon as one is by the back side. */
+export function faceToSay({ face = "front" }: BondResult, bonds: readonly BondResult[]): FaceUp | null {
+  return bonds.some((each) => each.face === "back") ? SIDE_NAMES[face] : null;
+}
+
+function bondView(bond: BondResult, bonds: readonly BondResult[]): BondView {
   return {
+    face: faceToSay(bond, bonds),
     steps: bond.fromStep === bond.toStep ? `step ${bond.fromStep}` : `step ${bond.fromStep} to ${bond.toStep}`,
     carrier: withPieceMark(bond.carrier, bond.piece),
     material: bond.material,

@@ -17,6 +17,7 @@ export const BLANK_HANDLING: StepHandlingValues = {
   viaProtrusion: null,
   thicknessVariation: null,
   bondFace: null,
+  debondFace: null,
   bondThicknessVariation: null,
   profile: null,
   sideUp: null,

@@ -132,7 +132,9 @@ function rebonded(
       : tried(otherMaterial ? null : bond.bondThickness, change.thickness, FINDER_NOTE),
     handling: sameLayer ? made.handling : { ...made.handling, bondThicknessVariation: null },
   };
-  const span = spansOfKinds(steps.map(({ kind }) => kind)).find(({ from }) => from === change.step);
+  const span = spansOfKinds(steps.map(({ kind, handling }) => ({ kind, ...handling }))).find(
+    ({ from }) => from === change.step,
+  );
   return steps.map((step, index) => {
     if (index + 1 === change.step) return next;
     if (index + 1 !== span?.to || !otherMaterial) return step;

@@ -41,6 +41,7 @@ export function stepHandlingOf(handling: StepHandlingValues): StepHandling {
   const { exposureTimes, contactFace, contactMeans, bumpHeight, bumpPeelForce } = handling;
   return given({
     exposureTimes: Object.keys(exposureTimes).length > 0 ? exposureTimes : null,
+    debondFace: handling.debondFace,
     solvent: handling.solvent,
     dehydrationBake: handling.dehydrationBake,
     contact: contactFace && contactMeans ? { face: contactFace, means: contactMeans } : null,

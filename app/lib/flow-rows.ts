@@ -1,7 +1,8 @@
+import { spansOfKinds } from "#app/engine/finder/bond-spans.ts";
 import type { StepKind } from "#app/engine/flow/model.ts";
 import type { Measured } from "#app/engine/measured.ts";
 import { formatQuantity } from "#app/engine/units/format.ts";
-import type { Exposure, FaceUp, Holding, Side } from "#app/engine/vocabulary.ts";
+import { SIDE_NAMES, type Exposure, type FaceUp, type Holding, type Side } from "#app/engine/vocabulary.ts";
 import type { StepHandlingValues } from "#app/schemas/step-handling.ts";
 import { withPieceMark } from "./carrier-units.ts";
 import { holdWords, runWords } from "./run-words.ts";
@@ -27,7 +28,7 @@ export interface ShownStep {
   carrier: { name: string; identity?: string | null } | null;
   bondingMaterial: { name: string } | null;
   bondThickness: Measured | null;
-  handling?: Partial<Pick<StepHandlingValues, "machine" | "recipe" | "sideUp" | "profile">>;
+  handling?: Partial<Pick<StepHandlingValues, "machine" | "recipe" | "sideUp" | "profile" | "bondFace" | "debondFace">>;
   films: {
     change: "adds" | "removes";
     side: Side;
@@ -59,7 +60,7 @@ export interface StepRow {
   profiled: boolean;
   exposures: Exposure[];
   planned: Holding;
-  /** the carrier that it is on after the step, with what bonds it at the step that bonds */
+  /** the carriers that it is on after the step, with what bonds one at the step that bonds */
   bond: string | null;
   /** some number of this step is assumed */
   assumed: boolean;
@@ -67,13 +68,11 @@ export interface StepRow {
 
 /** What a step adds to the wafer or takes off it. */
 export interface StepChange {
-  word: "adds" | "removes" | "trims";
+  word: "adds" | "removes" | "trims" | "lets go";
   /** 'Plated copper A, 5 µm, 35 %' */
   what: string;
   side: "device side" | "back side" | null;
 }
-
-const SIDES = { front: "device side", back: "back side" } as const;
 
 const length = (value: number, unit: string) => formatQuantity(value, "length", { unit });
 
@@ -83,10 +82,14 @@ function filmChange({ change, side, film, thickness, coverage }: ShownStep["film
     thickness && filmThicknessText(thickness.value),
     change === "adds" && coverage < 1 ? formatQuantity(coverage, "fraction", { unit: "%" }) : null,
   ];
-  return { word: change, what: parts.filter(Boolean).join(", "), side: SIDES[side] };
+  return { word: change, what: parts.filter(Boolean).join(", "), side: SIDE_NAMES[side] };
 }
 
-function changesOf({ films, trimWidth, trimDepth }: ShownStep): StepChange[] {
+/** `before`: the carriers that the wafer comes on. */
+function changesOf(
+  { kind, films, trimWidth, trimDepth, handling }: ShownStep,
+  before: readonly OnCarrier[],
+): StepChange[] {
   const trim: StepChange[] =
     trimWidth && trimDepth
       ? [
@@ -97,7 +100,9 @@ function changesOf({ films, trimWidth, trimDepth }: ShownStep): StepChange[] {
           },
         ]
       : [];
-  return [...trim, ...films.map(filmChange)];
+  const gone = kind === "debond" ? before.find(({ face }) => face === handling?.debondFace) : undefined;
+  const letGo: StepChange[] = gone ? [{ word: "lets go", what: gone.name, side: SIDE_NAMES[gone.face] }] : [];
+  return [...trim, ...films.map(filmChange), ...letGo];
 }
 
 function isAssumed(step: ShownStep): boolean {
@@ -107,34 +112,51 @@ function isAssumed(step: ShownStep): boolean {
   );
 }
 
-function bondWords({ carrier, bondingMaterial, bondThickness }: ShownStep): string {
-  return [
+function bondWords({ carrier, bondingMaterial, bondThickness, handling }: ShownStep): string {
+  const words = [
     carrier && withPieceMark(carrier.name, carrier.identity),
     bondingMaterial?.name,
     bondThickness && length(bondThickness.value, "µm"),
-  ]
-    .filter(Boolean)
-    .join(", ");
+  ];
+  return [...words, handling?.bondFace === "back" ? "on the back side" : null].filter(Boolean).join(", ");
 }
 
-/** The rows of the step table: silicon and carrier are carried on from step to step. */
+/** What holds a wafer between two carriers, where there is no room for both names. */
+export const BOTH_CARRIERS = "both carriers";
+
+interface OnCarrier {
+  name: string;
+  face: Side;
+}
+
+/** The carriers that the wafer is on after each step, by name and face. */
+export function carriersAlong(steps: readonly ShownStep[]): OnCarrier[][] {
+  const spans = spansOfKinds(
+    steps.map(({ kind, carrier, handling }) => ({ kind: kind === "bond" && !carrier ? null : kind, ...handling })),
+  );
+  return steps.map((_, index) => {
+    const on = spans.filter(({ from, to }) => from <= index + 1 && (to === null || index + 1 < to));
+    return on.flatMap(({ from, face }) => {
+      const name = steps[from - 1]?.carrier?.name;
+      return name === undefined ? [] : [{ name, face }];
+    });
+  });
+}
+
+/** The rows of the step table: silicon and carriers are carried on from step to step. */
 export function stepRows(steps: readonly ShownStep[], incoming: Measured): StepRow[] {
   let silicon = incoming;
-  let carrier: string | null = null;
+  const carriers = carriersAlong(steps);
   return steps.map((step, index) => {
     const changed = step.siliconAfter !== null;
     silicon = step.siliconAfter ?? silicon;
-    let bond = carrier;
-    if (step.kind === "bond" && step.carrier) {
-      carrier = step.carrier.name;
-      bond = bondWords(step);
-    } else if (step.kind === "debond") bond = carrier = null;
+    const bonds = step.kind === "bond" && step.carrier;
     return {
       id: step.id,
       number: index + 1,
       title: step.title,
       kind: step.kind,
-      changes: changesOf(step),
+      changes: changesOf(step, carriers[index - 1] ?? []),
       peak: formatBare(step.peakTemperature, "temperature", "°C"),
       minutes: holdWords({ holdTime: step.holdTime, profile: step.handling?.profile ?? null }),
       silicon: { text: siliconText(silicon), changed },
@@ -144,7 +166,7 @@ export function stepRows(steps: readonly ShownStep[], incoming: Measured): StepR
       profiled: Boolean(step.handling?.profile),
       exposures: step.exposures,
       planned: step.planned,
-      bond,
+      bond: bonds ? bondWords(step) : carriers[index]?.map(({ name }) => name).join(" and ") || null,
       assumed: isAssumed(step),
     };
   });

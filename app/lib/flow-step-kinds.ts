@@ -11,6 +11,7 @@ const TAPE_KINDS: readonly StepKind[] = ["laminate tape", "mount on frame"];
 export interface KindInputs {
   trim: boolean;
   bond: boolean;
+  debond: boolean;
   groundFace: boolean;
   tape: boolean;
 }
@@ -20,6 +21,7 @@ export function inputsOf(kind: string | undefined): KindInputs {
   return {
     trim: kind === "edge trim",
     bond: kind === "bond",
+    debond: kind === "debond",
     groundFace: FACE_KINDS.some((known) => known === kind),
     tape: TAPE_KINDS.some((known) => known === kind),
   };
@@ -40,6 +42,7 @@ export const KIND_FIELDS: readonly KindField[] = [
   { field: "thicknessVariation", group: "groundFace", who: THINNING },
   { field: "viaProtrusion", group: "groundFace", who: THINNING },
   { field: "bondFace", group: "bond", who: "a bond" },
+  { field: "debondFace", group: "debond", who: "a debond" },
   { field: "bondThicknessVariation", group: "bond", who: "a bond" },
   { field: "carrierPiece", group: "bond", who: "a bond" },
   { field: "tapeName", group: "tape", who: TAPE },

@@ -1,8 +1,10 @@
 import { EngineInputError } from "#app/engine/errors.ts";
+import { bondedFace, type BondState } from "#app/engine/flow/bond.ts";
 import type { FlowInput } from "#app/engine/flow/model.ts";
 import { applyStep, initialState, type FilmState, type WaferState } from "#app/engine/flow/state.ts";
 import type { FaceUp } from "#app/engine/vocabulary.ts";
 import { formatQuantity } from "#app/engine/units/format.ts";
+import { SIDE_NAMES } from "#app/engine/vocabulary.ts";
 import { filmThicknessText, siliconText } from "./flow-thickness.ts";
 
 /** The wafer as a step finds it, in words. */
@@ -20,6 +22,12 @@ export interface WaferBefore {
 function filmWords({ addition: { film, thickness, coverage } }: FilmState): string {
   const share = coverage < 1 ? `, ${formatQuantity(coverage, "fraction", { unit: "%" })}` : "";
   return `${film.name}, ${filmThicknessText(thickness.value)}${share}`;
+}
+
+/** 'Glass carrier, Laser-release adhesive'; between two carriers each with its face. */
+function bondWords(bond: BondState, { bonds }: WaferState): string {
+  const words = `${bond.carrier.name}, ${bond.material.name}`;
+  return bonds.length > 1 ? `${SIDE_NAMES[bondedFace(bond)]}: ${words}` : words;
 }
 
 /**
@@ -41,6 +49,6 @@ export function waferBefore(flow: FlowInput, index: number): WaferBefore | null 
     front: state.front.map(filmWords).toReversed(),
     back: state.back.map(filmWords),
     faceUp: state.faceUp,
-    on: state.bond ? `${state.bond.carrier.name}, ${state.bond.material.name}` : state.mount,
+    on: state.bonds.length > 0 ? state.bonds.map((bond) => bondWords(bond, state)).join("; ") : state.mount,
   };
 }

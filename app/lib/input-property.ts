@@ -6,6 +6,7 @@ import type { Measured } from "#app/engine/measured.ts";
 import type { Dimension } from "#app/engine/units/dimensions.ts";
 import { formatNumber } from "#app/engine/units/format-number.ts";
 import { formatQuantity } from "#app/engine/units/format.ts";
+import { SIDE_NAMES } from "#app/engine/vocabulary.ts";
 import type { InputRecord } from "#app/schemas/assessment-changes.ts";
 import { formatMeasured } from "./format-measured.ts";
 
@@ -45,6 +46,8 @@ const OTHER: Record<string, InputProperty> = {
   width: { label: "Trim width", dimension: "length", unit: "mm" },
   depth: { label: "Trim depth", dimension: "length", unit: "µm" },
   bond: { label: "Bond" },
+  face: { label: "Face" },
+  debondFace: { label: "Face that is let go" },
   carrier: { label: "Carrier" },
   material: { label: "Material" },
   film: { label: "Film" },
@@ -148,7 +151,7 @@ export function valueText(value: unknown, property: InputProperty): string {
   if (Array.isArray(value))
     return value.length === 0 ? NONE : value.map((each) => valueText(each, property)).join(", ");
   if (isObject(value)) return objectText(value);
-  return String(value);
+  return value === "front" || value === "back" ? SIDE_NAMES[value] : String(value);
 }
 
 function numberText(value: number, { dimension, unit, sign }: InputProperty, significant?: number): string {

@@ -108,16 +108,15 @@ const bondsOf = ({ steps }: SheetGroup, bonds: readonly BondResult[]) =>
 
 function heatLines(group: SheetGroup, { bonds, tapeTemperature }: DoNotContext): string[] {
   if (onTape(group.holding)) return [`Do not heat above ${celsius(tapeTemperature)} on tape`];
-  return bondsOf(group, bonds).map(
-    ({ temperatureLimit }) => `Do not heat above ${celsius(temperatureLimit)}: the bond`,
-  );
+  const limits = bondsOf(group, bonds).map(({ temperatureLimit }) => temperatureLimit);
+  // Between two carriers the bond that takes less decides.
+  return limits.length === 0 ? [] : [`Do not heat above ${celsius(Math.min(...limits))}: the bond`];
 }
 
 function vacuumLines(group: SheetGroup, { bonds }: DoNotContext): string[] {
   if (onTape(group.holding)) return ["Do not put into vacuum on tape"];
-  return bondsOf(group, bonds).flatMap(({ flowsFrom }) =>
-    flowsFrom === null ? [] : [`Do not put into vacuum above ${celsius(flowsFrom)}: the bond flows`],
-  );
+  const flows = bondsOf(group, bonds).flatMap(({ flowsFrom }) => flowsFrom ?? []);
+  return flows.length === 0 ? [] : [`Do not put into vacuum above ${celsius(Math.min(...flows))}: the bond flows`];
 }
 
 function trimLines({ steps }: SheetGroup, flow: readonly StepResult[]): string[] {

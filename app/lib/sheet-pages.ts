@@ -104,8 +104,8 @@ export function waferLines({ silicon, shape, hottest, runs, touch }: SheetGroupV
 }
 
 function footHeight({ bonds, tapes }: SheetView, frame: number): number {
-  const bondLines = bonds.map(({ carrier, material, debond }) =>
-    widthOf(`${carrier}, ${material}; debond ${debond}`, BODY.size) > frame - 75 ? 2 : 1,
+  const bondLines = bonds.map(({ face, carrier, material, debond }) =>
+    widthOf(`${carrier}, ${material}${face ? `, ${face}` : ""}; debond ${debond}`, BODY.size) > frame - 75 ? 2 : 1,
   );
   const writeIns = bondLines.reduce<number>((sum, each) => sum + each, tapes.length);
   return writeIns * HEIGHTS.writeIn + HEIGHTS.footRest + HEIGHTS.cautions;

@@ -17,7 +17,8 @@ import { assessmentNumber } from "./assessment-number.ts";
 import { revisionOf } from "./assessment-revision.ts";
 import { isRolled, lyingAs } from "./lying-as.ts";
 import { sentenceCase } from "./assessment-steps.ts";
-import { titleBlock, type AssessmentHead } from "./assessment-view.ts";
+import { faceToSay, titleBlock, type AssessmentHead } from "./assessment-view.ts";
+import { BOTH_CARRIERS } from "./flow-rows.ts";
 import { formatBare } from "./format-measured.ts";
 import { doNotLines } from "./sheet-do-not.ts";
 import { holdWords, runWords } from "./run-words.ts";
@@ -48,6 +49,8 @@ export interface SheetGroupView {
 
 export interface SheetBondView {
   steps: string;
+  /** 'device side bonded', where that has to be said */
+  face: string | null;
   carrier: string;
   material: string;
   debond: string;
@@ -101,7 +104,7 @@ export function sheetView(head: AssessmentHead, result: AssessmentResult): Sheet
     blocked: outcomeRank(verdict.outcome) >= outcomeRank("needs support"),
     support: {
       required: steps.map(({ required }) => required),
-      planned: steps.map(({ planned, plannedName }) => (planned === "bare" ? null : sentenceCase(plannedName))),
+      planned: steps.map((step) => plannedInShort(step, bonds)),
       outcomes: steps.map(({ outcome }) => outcome),
       numbers: steps.map(({ number }) => number),
       label: supportInWords(steps),
@@ -109,10 +112,17 @@ export function sheetView(head: AssessmentHead, result: AssessmentResult): Sheet
     changedSince: head.outOfDate ? head.createdAt.slice(0, 10) : null,
     diameter: result.wafer.diameter,
     groups: groups.map((group, index) => groupView(group, groups[index - 1]?.steps.at(-1) ?? null, result)),
-    bonds: bonds.map((bond) => bondView(bond, steps)),
+    bonds: bonds.map((bond) => bondView(bond, bonds, steps)),
     tapes: [...new Set(groups.flatMap(({ holding }) => (isTape(holding) ? [sentenceCase(holding)] : [])))],
     titleBlock: titleBlock(head, "Handling-risk sheet", "1 of 1"),
   };
+}
+
+/** What is planned to hold a step, for the support bar. */
+function plannedInShort({ number, planned, plannedName }: StepResult, bonds: readonly BondResult[]): string | null {
+  if (planned === "bare") return null;
+  const on = bonds.filter(({ fromStep, toStep }) => fromStep <= number && number <= toStep);
+  return sentenceCase(planned === "carrier" && on.length > 1 ? BOTH_CARRIERS : plannedName);
 }
 
 const isTape = (holding: Holding) => supportClassOf(holding) === "tape or ring";
@@ -235,10 +245,13 @@ const DEBOND_WORDS: Record<ReleaseMethod, string> = {
   "solvent through perforated carrier": "solvent through the carrier",
 };
 
-function bondView({ fromStep, toStep, carrier, piece, material, release }: BondResult, steps: readonly StepResult[]) {
+function bondView(bond: BondResult, bonds: readonly BondResult[], steps: readonly StepResult[]): SheetBondView {
+  const { fromStep, toStep, carrier, piece, material, release } = bond;
+  const face = faceToSay(bond, bonds);
   const debond = steps.find(({ number }) => number === toStep + 1);
   return {
     steps: stepsInWords(Array.from({ length: toStep - fromStep + 1 }, (_, index) => fromStep + index)),
+    face: face && `${face} bonded`,
     carrier: withPieceMark(carrier, piece),
     material,
     debond: debond ? `step ${debond.number}, ${DEBOND_WORDS[release]}` : "not in this flow",

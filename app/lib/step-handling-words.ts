@@ -1,13 +1,13 @@
 import type { Dimension } from "#app/engine/units/dimensions.ts";
 import { formatQuantity } from "#app/engine/units/format.ts";
 import type { Measured } from "#app/engine/measured.ts";
-import type { Side } from "#app/engine/vocabulary.ts";
+import { SIDE_NAMES, type Side } from "#app/engine/vocabulary.ts";
 import type { StepHandlingValues } from "#app/schemas/step-handling.ts";
 import { formatMeasured } from "./format-measured.ts";
 import { profileWords } from "./temperature-profile.ts";
 
 const yesOrNo = (answer: boolean | null) => (answer === null ? null : answer ? "yes" : "no");
-const face = (side: Side | null) => (side === null ? null : side === "front" ? "device side" : "back side");
+const face = (side: Side | null) => side && SIDE_NAMES[side];
 const time = (seconds: number | null) => (seconds === null ? null : formatQuantity(seconds, "time"));
 
 const figure = (measured: Measured | null, dimension: Dimension, unit: string) =>
@@ -41,6 +41,7 @@ export function stepHandlingWords(handling: StepHandlingValues): [label: string,
     ["Tape in base", handling.tapeBase],
     ["Tape in ultraviolet light", handling.tapeUltraviolet],
     ["Face that is bonded", face(handling.bondFace)],
+    ["Face that is let go", face(handling.debondFace)],
     ["Thickness variation of the bond", length(handling.bondThicknessVariation)],
     ["Face that is touched", face(handling.contactFace)],
     ["Touched with", handling.contactMeans],

@@ -5,6 +5,7 @@ import type {
   Outcome,
   ShapeRegime,
   ShapeWord,
+  Side,
   SupportClass,
 } from "#app/engine/vocabulary.ts";
 import type { ReleaseMethod, StepKind } from "#app/engine/flow/model.ts";
@@ -47,7 +48,7 @@ export interface StepResult {
   /** half-width of the interval of `silicon`; null when nobody gave one */
   siliconTolerance: number | null;
   planned: Holding;
-  /** what that is by name: the carrier, else the holding itself */
+  /** what that is by name: the carrier or both carriers, else the holding itself */
   plannedName: string;
   required: SupportClass;
   faceUp: FaceUp;
@@ -70,6 +71,8 @@ export interface StepResult {
 export interface BondResult {
   fromStep: number;
   toStep: number;
+  /** absent in results of before it was kept, which had bonds by the device side alone */
+  face?: Side;
   carrier: string;
   /** mark of the piece that is named */
   piece?: string;

@@ -76,6 +76,7 @@ export const stepHandling = z.object({
   viaProtrusion: optionalMeasured({ ...RULES.featureHeight, label: "height of the vias", ...assumed }),
   thicknessVariation: optionalMeasured({ ...RULES.thicknessVariation, ...assumed }),
   bondFace: optionalChoice(["front", "back"]),
+  debondFace: optionalChoice(["front", "back"]),
   bondThicknessVariation: optionalMeasured({ ...RULES.thicknessVariation, ...assumed }),
   /** s, K; the step's peak and hold time follow from it */
   profile: temperatureProfile,

@@ -6,10 +6,16 @@ import { DetailList } from "./DetailList.tsx";
 export function BondList({ bonds }: { bonds: readonly BondView[] }) {
   return (
     <div className="space-y-3">
-      {bonds.map(({ steps, carrier, material, thickness, limit, release }) => (
+      {bonds.map(({ steps, face, carrier, material, thickness, limit, release }) => (
         <DetailList key={steps}>
           <dt>Over</dt>
           <dd>{noBreak(steps)}</dd>
+          {face ? (
+            <>
+              <dt>Face</dt>
+              <dd>{face}</dd>
+            </>
+          ) : null}
           <dt>Carrier</dt>
           <dd>{noBreak(carrier)}</dd>
           <dt>Bonding material</dt>

@@ -85,6 +85,15 @@ export function KindFields({ fields, kind, choices }: Props) {
           hint="The back side for the second bond of a transfer between two carriers"
         />
       </KindGroup>
+      <KindGroup needed={has.debond} className={SHOWN.debond}>
+        <ChoiceField
+          field={handling.debondFace}
+          label="Face that is let go"
+          choices={FACES}
+          blank="The one that is bonded"
+          hint="Say it where the wafer is between two carriers"
+        />
+      </KindGroup>
     </>
   );
 }
@@ -95,6 +104,7 @@ export function KindFields({ fields, kind, choices }: Props) {
  */
 const SHOWN = {
   bond: "hidden noscript:block has-[[aria-invalid]]:block group-has-[option[value=bond]:checked]/step:block",
+  debond: "hidden noscript:block has-[[aria-invalid]]:block group-has-[option[value=debond]:checked]/step:block",
   trim: "hidden noscript:block has-[[aria-invalid]]:block group-has-[option[value='edge_trim']:checked]/step:block",
   tape: "hidden noscript:block has-[[aria-invalid]]:block group-has-[option:is([value='laminate_tape'],[value='mount_on_frame']):checked]/step:block",
   groundFace:

@@ -39,6 +39,7 @@ export function stepHandlingText(handling: StepHandlingValues): StepHandlingText
     viaProtrusion: length(handling.viaProtrusion),
     thicknessVariation: length(handling.thicknessVariation),
     bondFace: handling.bondFace ?? "",
+    debondFace: handling.debondFace ?? "",
     bondThicknessVariation: length(handling.bondThicknessVariation),
     profile: profileText(handling.profile),
     sideUp: handling.sideUp ?? "",

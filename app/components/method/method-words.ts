@@ -39,7 +39,7 @@ export const CONVENTIONS: readonly Term[] = [
   {
     term: "Shape as loaded",
     meaning:
-      "Words such as edges up and edges down are as the wafer lies on that tool. From bond to debond the pair lies carrier down, back side up. The standard bow stands beside them, second.",
+      "Words such as edges up and edges down are as the wafer lies on that tool. From bond to debond the pair lies carrier down: back side up when it is bonded by its device side, device side up when by its back side; between two carriers it lies on the one that was bonded last. The standard bow stands beside them, second.",
   },
   {
     term: "Tolerance and ±",
@@ -97,7 +97,8 @@ export const GLOSSARY: readonly Term[] = [
   { term: "sheet", meaning: "The handling-risk sheet that the floor works from, with number and revision." },
   {
     term: "side up",
-    meaning: "Which face is up on the tool: device side before bonding, back side from bond to debond.",
+    meaning:
+      "Which face is up on the tool: device side before bonding; from bond to debond the face away from the carrier that it lies on.",
   },
   { term: "stack", meaning: "Films on both sides of silicon of a given remaining thickness." },
   { term: "stop step", meaning: "Stops every lot at that step." },
@@ -113,6 +114,11 @@ export const GLOSSARY: readonly Term[] = [
   },
   { term: "thin-wafer gripper", meaning: "Edge grip, contactless or full-area pad: holds only while on that tool." },
   { term: "total thickness variation", meaning: "Largest less smallest thickness over a wafer, carrier or bond; TTV." },
+  {
+    term: "two-carrier transfer",
+    meaning:
+      "Bonded by the device side, thinned, bonded by the back side to a second carrier, let go by the first: the device side is free again for work.",
+  },
   { term: "verdict", meaning: "An assessment’s worst finding and the first step that causes it." },
   {
     term: "working",
@@ -148,7 +154,7 @@ export function leftOut(judged: readonly number[]): string[] {
     "Shapes are those of a free wafer without weight: sag is added to warp, not solved together with it.",
     "Narrow parallel lines, which pull along their length only: films count by the area that they cover.",
     "Split legs and rework loops.",
-    "The shape of a pair that is bonded by its back side, and of a wafer between two carriers.",
+    "How far two carriers bend at the peel front while a wafer between them leaves one and stays on the other.",
     "Moulded or reconstituted wafers, panels and packages: they are out of scope, whatever figures are typed.",
   ];
 }

@@ -11,10 +11,11 @@ export function SheetFoot({ sheet }: { sheet: SheetView }) {
     <>
       {bonds.length + tapes.length > 0 ? (
         <section className="keep-whole border-b-[0.25mm] border-ink px-[3mm] py-[1.2mm]" aria-label="Carrier and tape">
-          {bonds.map(({ steps, carrier, material, debond }) => (
+          {bonds.map(({ steps, face, carrier, material, debond }) => (
             <Line key={steps}>
               <span>
-                <strong>{carrier}</strong>, {material}; debond {noBreak(debond)}
+                <strong>{carrier}</strong>, {material}
+                {face ? `, ${face}` : ""}; debond {noBreak(debond)}
               </span>
               <WriteIn label="Carrier number" width="32mm" />
             </Line>

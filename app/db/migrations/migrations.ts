@@ -8,6 +8,7 @@ import { AssessmentLot } from "./2026-12-05-assessment-lot.ts";
 import { PhysicsInputs } from "./2026-12-05-physics-inputs.ts";
 import { ImportProfiles } from "./2026-12-06-import-profiles.ts";
 import { CarrierPieceVariation } from "./2026-12-06-carrier-piece-variation.ts";
+import { DebondFace } from "./2026-12-06-debond-face.ts";
 
 /** Every migration in the order in which it runs. */
 export const migrations = [
@@ -21,4 +22,5 @@ export const migrations = [
   { name: "2026-12-05-physics-inputs", class: PhysicsInputs },
   { name: "2026-12-06-import-profiles", class: ImportProfiles },
   { name: "2026-12-06-carrier-piece-variation", class: CarrierPieceVariation },
+  { name: "2026-12-06-debond-face", class: DebondFace },
 ];

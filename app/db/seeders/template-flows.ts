@@ -6,6 +6,7 @@ import type { DemoAddition, DemoStep } from "./demo-step.ts";
 import { TERN_STEPS } from "./demo-tern.ts";
 import type { SeedLibrary } from "./seed-library.ts";
 import { seedStep } from "./seed-step.ts";
+import { twoCarrierSteps } from "./template-two-carriers.ts";
 
 interface TemplateFlow {
   name: string;
@@ -46,6 +47,28 @@ export const TEMPLATE_FLOWS: TemplateFlow[] = [
       thickness: 40,
       peak: 150,
       debond: { title: "Mechanical peel debond, on frame", peak: 25 },
+    }),
+  },
+  {
+    name: "Two-carrier transfer to 50 µm, lines on both sides, 300 mm",
+    note: `${GO_THROUGH} The device side is bonded first, then the back side, and each debond says which it lets go.`,
+    diameter: 0.3,
+    incoming: 775,
+    steps: twoCarrierSteps({
+      first: {
+        carrier: "Borosilicate glass, 300 mm",
+        material: "Laser release on thermoset (class)",
+        thickness: 50,
+        peak: 180,
+        debond: { title: "Laser debond through glass", peak: 25 },
+      },
+      second: {
+        carrier: "Silicon carrier, 300 mm",
+        material: "Elastomer with release layer, peel (class)",
+        thickness: 40,
+        peak: 150,
+        debond: { title: "Mechanical peel debond, on frame", peak: 25 },
+      },
     }),
   },
 ];

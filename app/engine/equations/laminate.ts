@@ -52,7 +52,7 @@ export const LAMINATE = {
       { symbol: "D_1", meaning: "biaxial bending stiffness of the wafer by itself, D_2 of the carrier", unit: "N·m" },
     ],
     range:
-      "An adhesive above its flow point: no shear between the plates, no gap. On cooling the pair locks at the flow point in the state found there.",
+      "An adhesive above its flow point: no shear between the plates, no gap. A carrier that slides on the other face counts as a third plate. On cooling the pair locks at the flow point in the state found there.",
     sources: ["sliding-pair"],
   },
   "balancing-film": {

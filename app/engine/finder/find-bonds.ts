@@ -113,7 +113,7 @@ function tryBond(base: WalkedFlow, limits: SiteLimits, { span, choice, target, c
   const found: TriedBond = { ...choice, planned, outcome: "clear", margin: null, misfit: null, atTarget: null };
   // Rules look ahead at what later steps do, never at how the wafer is there: those stand in from the base until they are walked.
   const steps = base.steps.map((state, index) => ({ ...state, step: flow.steps[index] ?? state.step }));
-  const context = trialContext({ flow, steps }, limits);
+  const context = { ...trialContext({ flow, steps }, limits), tried: span };
   try {
     const states = planned ? base.steps.slice(span.from - 1) : walkOn(base, flow, limits);
     for (const state of states) {

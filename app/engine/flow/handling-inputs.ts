@@ -191,6 +191,8 @@ export interface EquipmentHandling {
 }
 
 export interface StepHandling {
+  /** of a debond: the face whose carrier it lets go; missing: the one bond there is, of two 'cannot judge' */
+  debondFace?: Side | null;
   /** how long each exposure lasts, s; missing: the hold time, else not known */
   exposureTimes?: Partial<Record<Exposure, number>> | null;
   solvent?: SolventFamily | null;

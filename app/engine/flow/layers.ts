@@ -1,16 +1,18 @@
 import type { DirectionalLayer } from "../directional/layer.ts";
 import type { PlaneTensor } from "../directional/plane-stiffness.ts";
-import { glassTransition, lockTemperature, type BondState } from "./bond.ts";
+import { bondOn, glassTransition, lockTemperature, type BondState } from "./bond.ts";
 import { carrierExpansion } from "./carrier-expansion.ts";
 import { isDirectional } from "./film-entry.ts";
 import { stackEntry, type StackEntry } from "./stack-entry.ts";
 import type { FilmState, WaferState } from "./state.ts";
 
-/** Films (without what they have flowed), silicon, adhesive and carrier from the bottom up, z out of the device side. */
+/** Films (without what they have flowed), silicon, adhesives and carriers from the bottom up, z out of the device side. */
 export interface LayerStack {
   entries: StackEntry[];
-  /** the film that each entry is; null for silicon, adhesive and carrier */
+  /** the film that each entry is; null for silicon, adhesives and carriers */
   films: (FilmState | null)[];
+  /** how many entries lie under the wafer */
+  below: number;
 }
 
 /** Share of its locked-in modulus that a bonding material keeps above its glass transition (common practice, no source). */
@@ -55,26 +57,33 @@ function unequalEntry(entry: StackEntry, freeStrain: PlaneTensor | undefined): S
 }
 
 /** The carrier by itself, as a plate that slides on the wafer. */
-export function carrierPlate(bond: BondState): StackEntry[] {
-  return [carrierEntry(bond)];
+export function carrierPlate(bond: BondState): StackEntry {
+  return carrierEntry(bond);
 }
 
-/** The laminate of a state at a temperature (K), with or without the carrier that it is bonded to. */
-export function layersOf(state: WaferState, temperature: number, options: { carrier: boolean }): LayerStack {
-  const { back, siliconEntries, front, bond } = state;
+/** The laminate of a state at a temperature (K) with some of the carriers that it is bonded to, each on its face. */
+export function layersOf(state: WaferState, temperature: number, bonds: readonly BondState[]): LayerStack {
+  const { back, siliconEntries, front } = state;
   const entries: StackEntry[] = [];
   const films: LayerStack["films"] = [];
+  const under = bondOn(bonds, "back");
+  if (under) {
+    entries.push(carrierEntry(under), adhesiveEntry(under, temperature));
+    films.push(null, null);
+  }
+  const below = entries.length;
   for (let n = back.length - 1; n >= 0; n -= 1) putFilm(back[n], entries, films);
   for (const silicon of siliconEntries) {
     entries.push(silicon);
     films.push(null);
   }
   for (const film of front) putFilm(film, entries, films);
-  if (options.carrier && bond) {
-    entries.push(adhesiveEntry(bond, temperature), carrierEntry(bond));
+  const over = bondOn(bonds, "front");
+  if (over) {
+    entries.push(adhesiveEntry(over, temperature), carrierEntry(over));
     films.push(null, null);
   }
-  return { entries, films };
+  return { entries, films, below };
 }
 
 function putFilm(film: FilmState | undefined, entries: StackEntry[], films: LayerStack["films"]): void {
@@ -84,12 +93,12 @@ function putFilm(film: FilmState | undefined, entries: StackEntry[], films: Laye
 }
 
 /** Whether a state bends differently along x and y. */
-export function bendsUnequally({ incoming, front, back, bond }: WaferState): boolean {
+export function bendsUnequally({ incoming, front, back, bonds }: WaferState): boolean {
   const unequal =
     incoming !== null && (incoming.film.x !== incoming.film.y || incoming.crystal.x !== incoming.crystal.y);
   return (
     unequal ||
-    bond?.rest?.unequal !== undefined ||
+    bonds.some(({ rest }) => rest?.unequal !== undefined) ||
     front.some(({ addition }) => isDirectional(addition)) ||
     back.some(({ addition }) => isDirectional(addition))
   );

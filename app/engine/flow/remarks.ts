@@ -1,6 +1,6 @@
 import { ROOM_TEMPERATURE } from "../laminate/layer.ts";
 import { formatQuantity } from "../units/format.ts";
-import { lockTemperature } from "./bond.ts";
+import { lockTemperature, type BondState } from "./bond.ts";
 import { knownBetween } from "./carrier-expansion.ts";
 import { bendsUnequally } from "./layers.ts";
 import type { FlowInput, StepInput } from "./model.ts";
@@ -14,15 +14,16 @@ const celsius = (kelvin: number) => formatQuantity(kelvin, "temperature", { unit
 /** What a step's figures rest on that nobody stated, a sentence each. */
 export function stepRemarks(flow: FlowInput, number: number, step: StepInput, after: WaferState): string[] {
   return [
-    ...unstatedFlowPoint(step, after),
-    ...beyondKnownExpansion(step, after),
+    // Two bonds of one material, or on carriers of one kind, have one remark.
+    ...new Set(after.bonds.flatMap((bond) => unstatedFlowPoint(step, bond))),
+    ...new Set(after.bonds.flatMap((bond) => beyondKnownExpansion(step, bond))),
     ...incomingTakenAsFilm(flow, number),
     ...flowsByMean(step, after),
   ];
 }
 
-function beyondKnownExpansion({ peakTemperature }: StepInput, { bond }: WaferState): string[] {
-  const known = bond && knownBetween(bond.carrier);
+function beyondKnownExpansion({ peakTemperature }: StepInput, bond: BondState): string[] {
+  const known = knownBetween(bond.carrier);
   if (!known) return [];
   const outside = [lockTemperature(bond), peakTemperature, ROOM_TEMPERATURE].filter(
     (temperature) => temperature < known.from - RANGE_SLACK || temperature > known.to + RANGE_SLACK,
@@ -34,9 +35,9 @@ function beyondKnownExpansion({ peakTemperature }: StepInput, { bond }: WaferSta
   ];
 }
 
-function unstatedFlowPoint({ peakTemperature }: StepInput, { bond }: WaferState): string[] {
-  if (!bond?.material.flows || bond.material.flowPoint) return [];
-  const { name, softening } = bond.material;
+function unstatedFlowPoint({ peakTemperature }: StepInput, { material }: BondState): string[] {
+  if (!material.flows || material.flowPoint) return [];
+  const { name, softening } = material;
   if (softening === null || peakTemperature < softening.value) return [];
   return [
     `${name} is a thermoplastic without a flow point: above ${celsius(softening.value)} its plates are taken not to slide, and the pair keeps its state of rest.`,

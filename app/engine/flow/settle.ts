@@ -2,9 +2,9 @@ import { flowStrains, type StressBounds } from "../laminate/bounded-stress.ts";
 import { newColumn } from "../laminate/column.ts";
 import type { Layer } from "../laminate/layer.ts";
 import { letFlow, placeLayers, type PlacedLayers } from "../laminate/placed-layers.ts";
-import { balanceLayers, type LaminateBalance } from "../laminate/solve-laminate.ts";
+import { balanceLayers, joinPlates, type LaminateBalance } from "../laminate/solve-laminate.ts";
 import { noteBounds } from "./film-limits.ts";
-import { locked, slides } from "./bond.ts";
+import { bondedFace, flowPoint, locked, slidingBonds, type BondState } from "./bond.ts";
 import { bendsUnequally, carrierPlate, layersOf, type LayerStack } from "./layers.ts";
 import type { StackEntry } from "./stack-entry.ts";
 import type { FilmState, WaferState } from "./state.ts";
@@ -20,7 +20,7 @@ export interface Settled extends PlacedStack {
   temperature: number;
   heldFlat: boolean;
   solution: LaminateBalance;
-  /** the carrier when it slides on the wafer; `entries` are those of the wafer then */
+  /** the carriers that slide on the wafer, a plate each; `entries` are the rest then. Null where none slides */
   slidingOn: StackEntry[] | null;
 }
 
@@ -42,14 +42,17 @@ export function statedLayers({ entries, placed }: PlacedStack): Layer[] {
 /**
  * The laminate at a temperature with its films at their limits: a metal beyond its yield stress flows and keeps the strain
  * (kinematic: on reversal it answers elastically over twice the yield stress); a polymer stops at zero stress and keeps
- * nothing. All films are solved together inside the laminate, exactly. A bonding material at its flow point lets carrier and
- * wafer slide: they share one curvature and nothing else.
+ * nothing. All films are solved together inside the laminate, exactly. A bonding material at its flow point lets its carrier
+ * slide on the wafer: they share one curvature and nothing else.
  */
 export function settle(state: WaferState, temperature: number, { metalHistory, heldFlat }: SettleOptions): Settled {
-  const sliding = state.bond !== null && slides(state.bond, temperature);
-  const slidingOn = state.bond && sliding ? carrierPlate(state.bond) : null;
-  const plate = slidingOn ? balanceLayers(placeLayers(slidingOn, temperature)) : undefined;
-  const stack = placeStack(layersOf(state, temperature, { carrier: !sliding }), temperature);
+  const sliding = slidingBonds(state.bonds, temperature);
+  const slidingOn = sliding.length > 0 ? sliding.map(carrierPlate) : null;
+  const plate = slidingOn
+    ? joinPlates(slidingOn.map((entry) => balanceLayers(placeLayers([entry], temperature))))
+    : undefined;
+  const locking = sliding.length > 0 ? state.bonds.filter((bond) => !sliding.includes(bond)) : state.bonds;
+  const stack = placeStack(layersOf(state, temperature, locking), temperature);
   const { placed, films } = stack;
   const bounds = boundsOf(films, { temperature, metalHistory });
   let solution = balanceLayers(placed, plate);
@@ -58,8 +61,9 @@ export function settle(state: WaferState, temperature: number, { metalHistory, h
     strains.forEach((by, at) => letFlow(placed, at, by));
     solution = balanceLayers(placed, plate);
   }
-  const back = state.back.map((film, n) => renewed(film, temperature, placed.flowed[state.back.length - 1 - n]));
-  const firstFront = state.back.length + state.siliconEntries.length;
+  const lastBack = stack.below + state.back.length - 1;
+  const back = state.back.map((film, n) => renewed(film, temperature, placed.flowed[lastBack - n]));
+  const firstFront = lastBack + 1 + state.siliconEntries.length;
   const front = state.front.map((film, n) => renewed(film, temperature, placed.flowed[firstFront + n]));
   return { ...stack, state: { ...state, back, front }, temperature, heldFlat, solution, slidingOn };
 }
@@ -107,27 +111,37 @@ function renewed(film: FilmState, temperature: number, flowed: number | undefine
 }
 
 /**
- * The wafer of a sliding pair once it has cooled to its flow point and locks in the shape that it has there: flat where a tool
- * holds it flat. Where its directions differ each locks as it lies.
+ * A wafer on sliding carriers once it has cooled to the highest of their flow points: the carriers that lock there lock in the
+ * shape that the wafer has, flat where a tool holds it flat.
  */
 export function lockedState(settled: Settled, flat: boolean): WaferState {
+  const { state, temperature } = settled;
+  const sliding = slidingBonds(state.bonds, temperature);
+  const first = Math.max(...sliding.map(({ material }) => flowPoint(material) ?? -Infinity));
+  const bonds = state.bonds.map((bond) =>
+    sliding.includes(bond) && flowPoint(bond.material) === first ? lockedBond(settled, bond, flat) : bond,
+  );
+  return { ...state, bonds };
+}
+
+/** A bond that locks at the temperature of a settled wafer, which it is no part of there. Where directions differ each locks as it lies. */
+export function lockedBond(settled: Settled, bond: BondState, flat: boolean): BondState {
   const { state, placed, solution, temperature } = settled;
-  if (!state.bond) return state;
   const { midplaneStrain, curvature, neutralPlane } = solution;
-  const top = placed.total / 2;
-  const adhesive = top + state.bond.thickness.value / 2;
-  const carrier = top + state.bond.thickness.value + state.bond.carrier.thickness.value / 2;
+  const out = bondedFace(bond) === "front" ? 1 : -1;
+  const face = placed.total / 2;
+  const adhesive = out * (face + bond.thickness.value / 2);
+  const carrier = out * (face + bond.thickness.value + bond.carrier.thickness.value / 2);
   const strainAt = (z: number) => midplaneStrain - curvature * (flat ? neutralPlane : z);
   const apart = bendsUnequally(state) ? strainApart(settled, flat) : null;
   const beyond = (z: number) => {
     const { x = 0, y = 0, xy = 0 } = apart?.(z) ?? {};
     return { x: x - strainAt(z), y: y - strainAt(z), xy };
   };
-  const bond = locked(
-    state.bond,
+  return locked(
+    bond,
     temperature,
     { adhesive: strainAt(adhesive), carrier: strainAt(carrier) },
     apart && { adhesive: beyond(adhesive), carrier: beyond(carrier) },
   );
-  return { ...state, bond };
 }

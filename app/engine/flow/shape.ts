@@ -25,7 +25,7 @@ export interface LyingShape {
   rollRadius: number | null;
   /** what it was computed from: the laminate, built when it is asked for, and the disc */
   layers: Layer[];
-  /** the carrier, where it slides on these layers */
+  /** the carriers that slide on these layers, a plate each; absent where none does */
   slidingOn?: Layer[];
   disc: FreeWaferShapeInput;
 }

@@ -2,14 +2,14 @@ import type { PlaneTensor } from "../directional/plane-stiffness.ts";
 import { EngineInputError } from "../errors.ts";
 import type { Measured } from "../measured.ts";
 import type { Orientation } from "../silicon/orientation.ts";
-import type { FaceUp, Holding, Side } from "../vocabulary.ts";
+import { otherSide, type FaceUp, type Holding, type Side } from "../vocabulary.ts";
 import { ROOM_TEMPERATURE } from "../laminate/layer.ts";
-import type { BondState } from "./bond.ts";
+import { bondedFace, bondOn, letGoAt, sameBond, type BondState } from "./bond.ts";
 import { filmEntry } from "./film-entry.ts";
 import { incomingParts, siliconEntries, type Incoming } from "./silicon.ts";
 import type { StackEntry } from "./stack-entry.ts";
 import type { BumpsInput, TapeInput } from "./handling-inputs.ts";
-import type { BondInput, FilmAddition, FlowInput, StepInput } from "./model.ts";
+import type { FilmAddition, FlowInput, StepInput } from "./model.ts";
 
 /** A film as it is on the wafer, with what it has been through. */
 export interface FilmState {
@@ -34,11 +34,12 @@ export interface WaferState {
   back: FilmState[];
   /** force per length of the ground or polished back face, N/m, compression negative */
   groundFaceForce: number;
-  bond: BondState | null;
-  /** carrier on the other face, from the second bond of a transfer to the debond of the first */
-  transfer: BondState | null;
+  /** what is bonded to it, at most one to a face, in the order in which they were made */
+  bonds: readonly BondState[];
   /** tape or frame that the wafer is on, if any */
   mount: "grinding tape" | "film frame" | "edge ring" | null;
+  /** side that this tape or frame is on */
+  mountedSide: Side | null;
   /** data of that tape where they were given */
   tape: TapeInput | null;
   trim: { width: Measured; depth: Measured } | null;
@@ -51,11 +52,6 @@ export interface WaferState {
   diced: boolean;
   holding: Holding;
   faceUp: FaceUp;
-}
-
-/** Face that a bond is on: the device side unless said. */
-export function bondedFace(bond: Pick<BondInput, "face">): Side {
-  return bond.face ?? "front";
 }
 
 /**
@@ -78,9 +74,9 @@ export function initialState(flow: FlowInput): WaferState {
     front: [],
     back: [],
     groundFaceForce: 0,
-    bond: null,
-    transfer: null,
+    bonds: [],
     mount: null,
+    mountedSide: null,
     tape: null,
     trim: null,
     ground: false,
@@ -126,25 +122,44 @@ function tapeAfter(before: WaferState, step: StepInput, mount: WaferState["mount
   return step.tape ?? before.tape;
 }
 
-/** The carriers after the step: a second bond on the other face is a transfer, and a debond takes the first one off. */
-function bondsAfter(before: WaferState, step: StepInput): Pick<WaferState, "bond" | "transfer"> {
-  const { bond, transfer } = before;
-  if (step.kind === "debond") return { bond: transfer, transfer: null };
-  if (step.kind !== "bond" || !step.bond) return { bond, transfer };
-  const made = { ...step.bond, bondTemperature: step.peakTemperature };
-  if (!bond) return { bond: made, transfer };
-  return { bond, transfer: !transfer && bondedFace(made) !== bondedFace(bond) ? made : transfer };
+/** The side that tape or frame is on: that which no carrier covers; of a wafer by itself, the device side for grinding tape. */
+function mountedSideAfter(before: WaferState, step: StepInput, mount: WaferState["mount"]): Side | null {
+  if (mount === null) return null;
+  if (step.kind !== "laminate tape" && step.kind !== "mount on frame") return before.mountedSide;
+  const [bond, other] = before.bonds;
+  if (bond && !other) return otherSide(bondedFace(bond));
+  return mount === "grinding tape" ? "front" : "back";
+}
+
+/** The carriers after the step. A second one goes on the other face: one on a face that is bonded is left to the order rule. */
+function bondsAfter({ bonds }: WaferState, step: StepInput): readonly BondState[] {
+  if (step.kind === "debond") {
+    const at = letGoAt(bonds, step.debondFace);
+    return bonds.filter((_, index) => index !== at);
+  }
+  if (step.kind !== "bond" || !step.bond || bondOn(bonds, bondedFace(step.bond))) return bonds;
+  return [...bonds, { ...step.bond, bondTemperature: step.peakTemperature }];
+}
+
+/** The bond that a step lets go; null when it is no debond, or of what is not bonded. */
+export function bondLetGo({ bonds }: Pick<WaferState, "bonds">, step: StepInput): BondState | null {
+  return step.kind === "debond" ? (bonds[letGoAt(bonds, step.debondFace)] ?? null) : null;
 }
 
 /**
- * The face that is usually up: the one away from the carrier, the back side on grinding tape, else the device side. In a transfer
- * the carrier that stays lies below.
+/**
+ * The face that is usually up once the step is planned as it is: the one away from the carrier, or from tape or frame. Between two
+ * carriers it lies on the one that was bonded last.
  */
-function usualFaceUp(holding: Holding, { bond, transfer }: Pick<WaferState, "bond" | "transfer">): FaceUp {
-  const lies = transfer ?? bond;
-  if (lies) return bondedFace(lies) === "front" ? "back side" : "device side";
-  return holding === "grinding tape" ? "back side" : "device side";
+function usualFaceUp({ holding, bonds, mount, mountedSide }: Lying): FaceUp {
+  const lies = bonds.at(-1);
+  const onFront = lies
+    ? bondedFace(lies) === "front"
+    : holding === "grinding tape" || (mount !== "grinding tape" && mountedSide === "front");
+  return onFront ? "back side" : "device side";
 }
+
+type Lying = Pick<WaferState, "holding" | "bonds" | "mount" | "mountedSide">;
 
 const TURNS: StepInput["kind"][] = ["bond", "debond", "laminate tape", "mount on frame"];
 
@@ -157,9 +172,9 @@ export function turnsIt({ kind }: Pick<StepInput, "kind">): boolean {
  * The face that is up after a step: as stated, else as usual where the step bonds, debonds or puts it on tape or frame or another
  * holder turns it, else as it was.
  */
-function faceUpAfter(before: WaferState, step: StepInput, bonds: Pick<WaferState, "bond" | "transfer">): FaceUp {
-  const usual = usualFaceUp(step.planned, bonds);
-  const turned = turnsIt(step) || usual !== usualFaceUp(before.holding, before);
+function faceUpAfter(before: WaferState, step: StepInput, lying: Lying): FaceUp {
+  const usual = usualFaceUp(lying);
+  const turned = turnsIt(step) || usual !== usualFaceUp(before);
   return step.sideUp ?? (turned ? usual : before.faceUp);
 }
 
@@ -186,6 +201,7 @@ export function applyStep(before: WaferState, step: StepInput, field: string): W
   const thinner = step.siliconAfter !== null && step.siliconAfter.value <= before.silicon.value;
   const bonds = bondsAfter(before, step);
   const mount = mountAfter(before, step);
+  const mountedSide = mountedSideAfter(before, step, mount);
   const { orientation, incoming } = before;
   const silicon = thinner && step.siliconAfter ? step.siliconAfter : before.silicon;
   const groundFaceForce = step.groundFaceForce?.value ?? before.groundFaceForce;
@@ -201,8 +217,9 @@ export function applyStep(before: WaferState, step: StepInput, field: string): W
     front: add(remove(before.front, "front", step), "front", step),
     back: add(remove(before.back, "back", step), "back", step),
     groundFaceForce,
-    ...bonds,
+    bonds,
     mount,
+    mountedSide,
     tape: tapeAfter(before, step, mount),
     trim: step.edgeTrim ?? before.trim,
     ground: before.ground || step.kind === "grind",
@@ -211,7 +228,7 @@ export function applyStep(before: WaferState, step: StepInput, field: string): W
     topography: step.topography ?? before.topography,
     diced: before.diced || step.kind === "dice",
     holding: step.planned,
-    faceUp: faceUpAfter(before, step, bonds),
+    faceUp: faceUpAfter(before, step, { holding: step.planned, bonds, mount, mountedSide }),
   };
 }
 
@@ -221,7 +238,7 @@ export function allFilms(state: WaferState): FilmState[] {
 }
 
 /**
- * Whether two states bend alike from here on: the same silicon, films with the same history, ground face and bond. Inputs are
+ * Whether two states bend alike from here on: the same silicon, films with the same history, ground face and bonds. Inputs are
  * compared by identity, which is what copies of one flow share.
  */
 export function sameState(a: WaferState, b: WaferState): boolean {
@@ -235,22 +252,19 @@ export function sameState(a: WaferState, b: WaferState): boolean {
     a.silicon === b.silicon &&
     sameIncoming(a.incoming, b.incoming) &&
     a.groundFaceForce === b.groundFaceForce &&
-    sameBond(a.bond, b.bond) &&
+    sameBonds(a.bonds, b.bonds) &&
     alike(a.front, b.front) &&
     alike(a.back, b.back)
   );
 }
 
-function sameBond(a: BondState | null, b: BondState | null): boolean {
+function sameBonds(a: readonly BondState[], b: readonly BondState[]): boolean {
   return (
-    a?.carrier === b?.carrier &&
-    a?.material === b?.material &&
-    a?.thickness === b?.thickness &&
-    a?.bondTemperature === b?.bondTemperature &&
-    a?.rest?.carrierStrain === b?.rest?.carrierStrain &&
-    a?.rest?.adhesiveStrain === b?.rest?.adhesiveStrain &&
-    sameTensor(a?.rest?.unequal?.carrier, b?.rest?.unequal?.carrier) &&
-    sameTensor(a?.rest?.unequal?.adhesive, b?.rest?.unequal?.adhesive)
+    a.length === b.length &&
+    a.every((bond, n) => {
+      const other = b[n];
+      return other !== undefined && sameBond(bond, other);
+    })
   );
 }
 

@@ -2,9 +2,10 @@ import { EngineInputError } from "../errors.ts";
 import { ROOM_TEMPERATURE } from "../laminate/layer.ts";
 import { balanceLayers } from "../laminate/solve-laminate.ts";
 import type { Holding } from "../vocabulary.ts";
-import { flowPoint, slides } from "./bond.ts";
+import { bondedFace, bondOn, flowPoint, slides, slidingBonds, type BondState } from "./bond.ts";
 import { bendsUnequally, layersOf } from "./layers.ts";
 import type { FlowInput, StepInput } from "./model.ts";
+import { restOnPair } from "./second-bond.ts";
 import { lockedState, placeStack, settle, statedLayers, type Settled, type SettleOptions } from "./settle.ts";
 import { lyingShape, type LyingShape } from "./shape.ts";
 import { unequalCurvature } from "./unequal.ts";
@@ -45,50 +46,65 @@ export function takeStep(
   const options = { metalHistory, heldFlat: flat };
   const places = turningTemperatures(step);
   const hottest = places.indexOf(Math.max(...places));
-  const bonds = { bond: applied.bond, transfer: applied.transfer };
-  const rebonds = applied.bond !== before.bond;
-  let state = rebonds && hottest > 0 ? { ...applied, bond: before.bond, transfer: before.transfer } : applied;
+  const second = before.bonds.length > 0 && applied.bonds.length > before.bonds.length;
+  let state = hottest > 0 ? { ...applied, bonds: before.bonds } : applied;
   let settled: Settled | null = null;
   let hot: Settled | null = null;
   for (const [at, temperature] of places.entries()) {
-    if (rebonds && at === hottest && at > 0) state = { ...state, ...bonds };
-    settled = settle(state, temperature, options);
+    if (at === hottest && at > 0) state = { ...state, bonds: asTheyAre(applied.bonds, state.bonds) };
+    const pressed = second && at === hottest;
+    settled = settle(pressed ? restOnPair(state, temperature, options) : state, temperature, options);
     if (at === hottest) hot = settled;
-    const next = places[at + 1];
-    const locks = slides(state.bond, temperature) && (next === undefined || !slides(state.bond, next));
-    state = locks ? relock(before, settled, step, options) : settled.state;
+    // A second bond is pressed flat until all has locked.
+    state = pressed ? settled.state : relock(before, settled, { step, options, next: places[at + 1] });
   }
   if (!hot || !settled) throw new Error("a step has a hottest moment");
   const cold = settled.temperature === ROOM_TEMPERATURE ? settled : settle(state, ROOM_TEMPERATURE, options);
   return { after: cold.state, hot, cold, flat };
 }
 
+/** The bonds after a step, those that were there before as the step has left them so far. */
+const asTheyAre = (after: readonly BondState[], now: readonly BondState[]): BondState[] =>
+  after.map((bond) => bondOn(now, bondedFace(bond)) ?? bond);
+
+interface Cooling {
+  step: StepInput;
+  options: SettleOptions;
+  /** temperature at which the step turns next, K; none when it goes to 25 °C */
+  next: number | undefined;
+}
+
 /**
- * A pair that has slid, cooled to where it locks. One that is bonded in this step is pressed flat while it cools, and rests flat
- * on the silicon; one that was bonded before locks as it lies, flat on a tool that holds it flat.
+ * A pair that has slid, cooled to where it locks, if it locks before the step turns next; between two carriers, the one with the
+ * higher flow point first. One that is bonded in this step is pressed flat while it cools, and rests flat on the silicon; one that
+ * was bonded before locks as it lies, flat on a tool that holds it flat.
  */
-function relock(before: WaferState, hot: Settled, step: StepInput, options: SettleOptions): WaferState {
-  const from = hot.state.bond ? flowPoint(hot.state.bond.material) : null;
-  if (!before.bond || from === null) return hot.state;
+function relock(before: WaferState, hot: Settled, { step, options, next }: Cooling): WaferState {
+  if (before.bonds.length === 0) return hot.state;
   const flat = options.heldFlat || step.equipment?.atPeak === "held";
-  return lockedState(settle(hot.state, from, { ...options, heldFlat: flat }), flat);
+  const points = slidingBonds(hot.state.bonds, hot.temperature)
+    .filter((bond) => next === undefined || !slides(bond, next))
+    .map(({ material }) => flowPoint(material) ?? 0);
+  return [...new Set(points)]
+    .sort((a, b) => b - a)
+    .reduce((state, from) => lockedState(settle(state, from, { ...options, heldFlat: flat }), flat), hot.state);
 }
 
 /** Shape at 25 °C after the step as it lies on the tool; null when tape or frame holds it flat. */
 export function roomShape(wafer: Wafer, { after, cold, flat }: WalkedStep): LyingShape | null {
-  return flat ? null : settledShape(wafer, cold, after.bond !== null);
+  return flat ? null : settledShape(wafer, cold, after.bonds.length > 0);
 }
 
 /** Shape at the hottest of the step; null at room temperature or when tape or frame holds it flat. */
 export function peakShape(wafer: Wafer, { after, hot, flat }: WalkedStep): LyingShape | null {
-  return flat || hot.temperature <= ROOM_TEMPERATURE ? null : settledShape(wafer, hot, after.bond !== null);
+  return flat || hot.temperature <= ROOM_TEMPERATURE ? null : settledShape(wafer, hot, after.bonds.length > 0);
 }
 
 /** Shape at 25 °C as it would lie if nothing held it. */
 export function releasedShape(wafer: Wafer, { after, cold }: WalkedStep): LyingShape {
-  if (!after.bond) return settledShape(wafer, cold, false);
+  if (after.bonds.length === 0) return settledShape(wafer, cold, false);
   const temperature = ROOM_TEMPERATURE;
-  const stack = placeStack(layersOf(after, temperature, { carrier: false }), temperature);
+  const stack = placeStack(layersOf(after, temperature, []), temperature);
   const solution = balanceLayers(stack.placed);
   const unequal = bendsUnequally(after) ? unequalCurvature(stack, temperature, null) : undefined;
   return lyingShape(wafer, { layers: () => statedLayers(stack), solution, temperature, bonded: false, unequal });

@@ -46,7 +46,7 @@ export function unequalCurvature(
     const { curvatureX, curvatureY, twist, principal, effectiveThickness } = wafer;
     return { curvatureX, curvatureY, twist, principal, effectiveThickness, layers };
   }
-  return { ...sharedCurvature(wafer, plateAlone(slidingOn, temperature)), layers };
+  return { ...sharedCurvature([wafer, ...platesAlone(slidingOn, temperature)]), layers };
 }
 
 /**
@@ -59,7 +59,7 @@ export function strainApart(
 ): (z: number) => PlaneTensor {
   const wafer = solveDirectionalLaminate(flowedLayers(stack), { temperature });
   if (flat || !slidingOn) return () => wafer.flatStrain;
-  const { curvatureX, curvatureY, twist } = sharedCurvature(wafer, plateAlone(slidingOn, temperature));
+  const { curvatureX, curvatureY, twist } = sharedCurvature([wafer, ...platesAlone(slidingOn, temperature)]);
   const stretching = requireStiff(wafer.stretchingStiffness);
   // The carrier bends the wafer away from its own curvature; free of force, its middle stretches with that.
   const added = {
@@ -75,19 +75,16 @@ function flowedLayers({ entries, placed }: PlacedStack): DirectionalLayer[] {
   return entries.map((entry, at) => directionalEntry(entry, placed.flowed[at] ?? 0));
 }
 
-function plateAlone(entries: readonly StackEntry[], temperature: number): DirectionalLaminateResult {
-  return solveDirectionalLaminate(
-    entries.map((entry) => directionalEntry(entry, 0)),
-    { temperature },
-  );
+function platesAlone(entries: readonly StackEntry[], temperature: number): DirectionalLaminateResult[] {
+  return entries.map((entry) => solveDirectionalLaminate([directionalEntry(entry, 0)], { temperature }));
 }
 
-/** Two plates that take one curvature and slide: their moments and bending stiffnesses add. */
-function sharedCurvature(a: DirectionalLaminateResult, b: DirectionalLaminateResult) {
-  const stiffness = requireStiff(addStiffness(a.freeBendingStiffness, b.freeBendingStiffness));
-  const { x, y, xy } = stiffness.solve(addTensor(momentOf(a), momentOf(b)));
-  const stretching = [a, b].map(({ stretchingStiffness: q }) => (q.xx + 2 * q.xy + q.yy) / 2);
-  const bending = [a, b].map(({ effectiveThickness }, n) => ((stretching[n] ?? 0) * effectiveThickness ** 2) / 12);
+/** Plates that take one curvature and slide: their moments and bending stiffnesses add. */
+function sharedCurvature(plates: readonly DirectionalLaminateResult[]) {
+  const stiffness = requireStiff(plates.map(({ freeBendingStiffness }) => freeBendingStiffness).reduce(addStiffness));
+  const { x, y, xy } = stiffness.solve(plates.map(momentOf).reduce((sum, moment) => addTensor(sum, moment)));
+  const stretching = plates.map(({ stretchingStiffness: q }) => (q.xx + 2 * q.xy + q.yy) / 2);
+  const bending = plates.map(({ effectiveThickness }, n) => ((stretching[n] ?? 0) * effectiveThickness ** 2) / 12);
   const total = (values: number[]) => values.reduce((sum, value) => sum + value, 0);
   return {
     curvatureX: x,

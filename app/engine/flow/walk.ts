@@ -81,7 +81,7 @@ export function describeStep(
     after,
     atRoom,
     atPeak: peakShape(wafer, walked),
-    released: atRoom && !after.bond ? atRoom : releasedShape(wafer, walked),
+    released: atRoom && after.bonds.length === 0 ? atRoom : releasedShape(wafer, walked),
     lies: shapeWord(atRoom, after.faceUp, limits.flatWithin.value),
     filmForce: filmForces(after),
     remarks: stepRemarks(flow, place.number, place.step, after),

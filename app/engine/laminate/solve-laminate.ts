@@ -37,6 +37,8 @@ export interface LaminateOptions {
   temperature?: number;
   /** a second stack on top that slides, bottom to top */
   slidingOn?: readonly Layer[];
+  /** a third one that slides on the other face */
+  alsoSlidingOn?: readonly Layer[];
 }
 
 export interface LaminateResult extends LaminateBalance {
@@ -62,7 +64,8 @@ export interface LaminateResult extends LaminateBalance {
  *
  * `slidingOn` is a second stack that lies on the first and slides on it without friction, as on an adhesive that has become a
  * liquid: both take one curvature, each stays free of force, so their bending stiffnesses add and so do the moments that each
- * would bend itself with. Strains and stresses are those of the first stack; base and zero of strain too.
+ * would bend itself with. `alsoSlidingOn` is a third one on the lower face, of which the same holds. Strains and stresses are
+ * those of the first stack; base and zero of strain too.
  *
  * Source: Townsend, Barnett and Brunner 1987; Hsueh 2002; Hsueh, Lee and Chuang 2003. Two layers: Freund, Floro and Chason 1999.
  * Sliding: own derivation.
@@ -74,7 +77,10 @@ export function solveLaminate(layersBottomToTop: readonly Layer[], o: LaminateOp
   });
   const temperature = o.temperature ?? ROOM_TEMPERATURE;
   const placed = placeLayers(named, temperature);
-  const balance = balanceLayers(placed, o.slidingOn ? solveLaminate(o.slidingOn, { temperature }) : undefined);
+  const sliding = [o.slidingOn, o.alsoSlidingOn].flatMap((stack) =>
+    stack ? [solveLaminate(stack, { temperature })] : [],
+  );
+  const balance = balanceLayers(placed, joinPlates(sliding));
   const result: LaminateResult = { ...balance, freeStrain: [], stressBottom: [], stressTop: [], meanStress: [] };
   for (let n = 0; n < placed.count; n += 1) {
     const half = (placed.thickness[n] ?? 0) / 2;
@@ -99,6 +105,20 @@ function stressAt(
 
 /** A stack that takes the same curvature as another and slides on it. */
 export type SlidingPlate = Pick<LaminateBalance, "curvature" | "bendingStiffness" | "stretchingStiffness">;
+
+/** Plates that all slide and take one curvature, as one: none for none. */
+export function joinPlates([first, ...others]: readonly SlidingPlate[]): SlidingPlate | undefined {
+  return others.reduce<SlidingPlate | undefined>((a, b) => a && joinTwo(a, b), first);
+}
+
+function joinTwo(a: SlidingPlate, b: SlidingPlate): SlidingPlate {
+  const bendingStiffness = a.bendingStiffness + b.bendingStiffness;
+  return {
+    bendingStiffness,
+    curvature: (a.bendingStiffness * a.curvature + b.bendingStiffness * b.curvature) / bendingStiffness,
+    stretchingStiffness: a.stretchingStiffness + b.stretchingStiffness,
+  };
+}
 
 /** The part of `solveLaminate` that concerns the stack as a whole, for layers that are checked and placed already. */
 export function balanceLayers(layers: PlacedLayers, slidingOn?: SlidingPlate): LaminateBalance {

@@ -4,7 +4,7 @@ import { solveLaminate, type LaminateOptions } from "./solve-laminate.ts";
 
 /** The curvature of `solveLaminate` as data: for each layer, bottom to top, what went into the sums. */
 export function laminateWorking(layersBottomToTop: readonly Layer[], o: LaminateOptions = {}): Working {
-  if (o.slidingOn) return slidingPairWorking(layersBottomToTop, o.slidingOn, o.temperature);
+  if (o.slidingOn) return slidingWorking(layersBottomToTop, o.slidingOn, o);
   const solved = solveLaminate(layersBottomToTop, o);
   const temperature: WorkingLine = {
     symbol: "T",
@@ -24,9 +24,13 @@ export function laminateWorking(layersBottomToTop: readonly Layer[], o: Laminate
   };
 }
 
-function slidingPairWorking(lower: readonly Layer[], upper: readonly Layer[], temperature?: number): Working {
+function slidingWorking(wafer: readonly Layer[], slidingOn: readonly Layer[], o: LaminateOptions): Working {
+  const { temperature, alsoSlidingOn } = o;
   const at = temperature === undefined ? {} : { temperature };
-  const plates = [lower, upper].map((layers) => ({ layers, solved: solveLaminate(layers, at) }));
+  const plates = [wafer, slidingOn, ...(alsoSlidingOn ? [alsoSlidingOn] : [])].map((layers) => ({
+    layers,
+    solved: solveLaminate(layers, at),
+  }));
   return {
     equation: "sliding-pair",
     inputs: plates.flatMap(({ solved }, n): WorkingLine[] => [
@@ -40,11 +44,13 @@ function slidingPairWorking(lower: readonly Layer[], upper: readonly Layer[], te
     ]),
     result: {
       symbol: "κ",
-      meaning: "curvature of both, bowl positive",
-      value: solveLaminate(lower, { ...at, slidingOn: upper }).curvature,
+      meaning: `curvature of ${alsoSlidingOn ? "all" : "both"}, bowl positive`,
+      value: solveLaminate(wafer, o).curvature,
       unit: "1/m",
     },
-    note: "The adhesive is above its flow point and carries no shear. Plate 1 is the wafer, plate 2 the carrier.",
+    note: alsoSlidingOn
+      ? "Both adhesives are above their flow points and carry no shear. Plate 1 is the wafer, plates 2 and 3 the carriers."
+      : "The adhesive is above its flow point and carries no shear. Plate 1 is the wafer with all that does not slide, plate 2 the carrier.",
     from: plates.map(({ layers }) => laminateWorking(layers, at)),
   };
 }

@@ -1,8 +1,9 @@
 import { bondSpans } from "../finder/bond-spans.ts";
-import type { FilmAddition } from "../flow/model.ts";
-import type { WaferState } from "../flow/state.ts";
+import type { BondInput, FilmAddition } from "../flow/model.ts";
+import { bondLetGo, type WaferState } from "../flow/state.ts";
 import type { StepState } from "../flow/walk.ts";
 import { ROOM_TEMPERATURE } from "../laminate/layer.ts";
+import { isBonded } from "../rules/bonded.ts";
 import type { Catalogue } from "../trial/catalogue.ts";
 import type { FlowChange } from "../trial/change.ts";
 import type { WalkedFlow } from "../trial/trial-walk.ts";
@@ -120,45 +121,49 @@ function ofFilm(
   return [...byThickness, ...byStress, ...(both ? [range("film on the back", 0, thick * 3)] : [])];
 }
 
-function bondSpanAt({ flow }: WalkedFlow, { number }: StepState) {
-  // The step after the debond still deals with what is left of the bond.
-  return bondSpans(flow).find(({ from, to }) => from <= number && (to === null || number <= to + 1)) ?? null;
+/** The bonds that are there at a step, with what they are. The step after the debond still deals with what is left of a bond. */
+function bondsAt({ flow }: WalkedFlow, { number }: StepState): { from: number; bond: BondInput }[] {
+  return bondSpans(flow)
+    .filter(({ from, to }) => from <= number && (to === null || number <= to + 1))
+    .flatMap(({ from }) => {
+      const bond = flow.steps[from - 1]?.bond;
+      return bond ? [{ from, bond }] : [];
+    });
 }
 
 /** Another carrier or another bonding material; a thickness that the material is not put on in becomes the nearest one that is. */
 function bonds(base: WalkedFlow, state: StepState, { carriers, materials }: Catalogue): Candidate[] {
-  const span = bondSpanAt(base, state);
-  const bond = span ? base.flow.steps[span.from - 1]?.bond : null;
-  if (!span || !bond) return [];
-  const choice = (carrier: string, material: string, thickness: number): Choice => ({
-    kind: "choice",
-    change: { quantity: "bond", step: span.from, carrier, material, thickness },
+  return bondsAt(base, state).flatMap(({ from, bond }) => {
+    const choice = (carrier: string, material: string, thickness: number): Choice => ({
+      kind: "choice",
+      change: { quantity: "bond", step: from, carrier, material, thickness },
+    });
+    const { value } = bond.thickness;
+    return [
+      ...carriers.filter(({ id }) => id !== bond.carrier.id).map(({ id }) => choice(id, bond.material.id, value)),
+      ...materials
+        .filter(({ material }) => material.id !== bond.material.id)
+        .map(({ material, leastThickness, mostThickness }) =>
+          choice(bond.carrier.id, material.id, Math.min(Math.max(value, leastThickness), mostThickness)),
+        ),
+    ];
   });
-  const { value } = bond.thickness;
-  return [
-    ...carriers.filter(({ id }) => id !== bond.carrier.id).map(({ id }) => choice(id, bond.material.id, value)),
-    ...materials
-      .filter(({ material }) => material.id !== bond.material.id)
-      .map(({ material, leastThickness, mostThickness }) =>
-        choice(bond.carrier.id, material.id, Math.min(Math.max(value, leastThickness), mostThickness)),
-      ),
-  ];
 }
 
 function bondThickness(base: WalkedFlow, state: StepState, { materials }: Catalogue): Candidate[] {
-  const span = bondSpanAt(base, state);
-  const bond = span ? base.flow.steps[span.from - 1]?.bond : null;
-  const entry = materials.find(({ material }) => material.id === bond?.material.id);
-  if (!span || !bond || !entry) return [];
-  const from = bond.thickness.value;
-  return [entry.leastThickness, entry.mostThickness]
-    .filter((to) => Math.abs(to - from) > 1e-9)
-    .map((to) => ({
-      kind: "range",
-      from,
-      to,
-      change: (value) => ({ quantity: "bond thickness", step: span.from, value }),
-    }));
+  return bondsAt(base, state).flatMap(({ from: step, bond }) => {
+    const entry = materials.find(({ material }) => material.id === bond.material.id);
+    if (!entry) return [];
+    const from = bond.thickness.value;
+    return [entry.leastThickness, entry.mostThickness]
+      .filter((to) => Math.abs(to - from) > 1e-9)
+      .map((to): Range => ({
+        kind: "range",
+        from,
+        to,
+        change: (value) => ({ quantity: "bond thickness", step, value }),
+      }));
+  });
 }
 
 function hotBefore({ steps }: WalkedFlow, { number }: StepState): StepState[] {
@@ -174,7 +179,7 @@ function coolest({ step, before }: StepState): number {
     case "bond":
       return step.bond?.material.bondTemperature.value ?? step.peakTemperature;
     case "debond":
-      return before.bond?.material.releaseTemperature.value ?? step.peakTemperature;
+      return bondLetGo(before, step)?.material.releaseTemperature.value ?? step.peakTemperature;
     case "reflow":
       return step.peakTemperature;
     default:
@@ -215,7 +220,7 @@ function tools({ number, step }: StepState, catalogue: Catalogue): Candidate[] {
 }
 
 const isFree = ({ step, after }: StepState) =>
-  !after.bond && (step.planned === "bare" || step.planned === "thin-wafer gripper");
+  !isBonded(after) && (step.planned === "bare" || step.planned === "thin-wafer gripper");
 
 /** The first of the steps in a row, up to this one, at which the wafer is as thin and nothing holds it. */
 function firstFree({ steps }: WalkedFlow, { number, after }: StepState): number {
@@ -229,7 +234,7 @@ function firstFree({ steps }: WalkedFlow, { number, after }: StepState): number 
 
 function supports(base: WalkedFlow, state: StepState, catalogue: Catalogue): Candidate[] {
   const { number, step, after } = state;
-  const held = after.bond ? ["carrier" as const] : after.mount ? [after.mount] : [];
+  const held = isBonded(after) ? ["carrier" as const] : after.mount ? [after.mount] : [];
   const holdings = [...held, "thin-wafer gripper" as const].filter((holding) => holding !== step.planned);
   const mounters = isFree(state) ? catalogue.tools.filter(({ kinds }) => kinds.includes("mount on frame")) : [];
   const from = firstFree(base, state);

@@ -1,3 +1,4 @@
+import { bondedFace, bondOn, type BondState } from "../flow/bond.ts";
 import type { BondingMaterialInput } from "../flow/model.ts";
 import { timeAbove, timesReached } from "../flow/temperature-profile.ts";
 import type { StepState } from "../flow/walk.ts";
@@ -8,21 +9,25 @@ import { celsius, duration } from "./words.ts";
 
 const make = findingsOf(6, "Bonding material");
 
-/** Hot steps of a bond so far, this one included, debond and bond left out. */
-function heatings({ steps, limits }: RuleContext, state: StepState): StepState[] {
+/** Hot steps of a bond so far, this one included, its own debond and bond left out. */
+function heatings({ steps, limits }: RuleContext, state: StepState, bond: BondState): StepState[] {
+  const face = bondedFace(bond);
   const made = steps
     .slice(0, state.number - 1)
-    .findLastIndex(({ step, before }) => step.kind === "bond" && !before.bond);
+    .findLastIndex(
+      ({ step, before, after }) => step.kind === "bond" && !bondOn(before.bonds, face) && bondOn(after.bonds, face),
+    );
   return steps
     .slice(made + 1, state.number)
     .filter(({ step }) => reaches(step.peakTemperature, limits.heatingFrom.value));
 }
 
 /** What the heat of all steps since the bond adds up to, judged at each step that adds to it. */
-export function bondBudget(context: RuleContext, state: StepState, material: BondingMaterialInput): Finding[] {
+export function bondBudget(context: RuleContext, state: StepState, bond: BondState): Finding[] {
+  const { material } = bond;
   const { thermalCycles, thermalTime, name } = material;
   if (!thermalCycles && !thermalTime) return [];
-  const hot = heatings(context, state);
+  const hot = heatings(context, state, bond);
   if (hot.at(-1) !== state) return [];
   const findings: Finding[] = [];
   const from = celsius(context.limits.heatingFrom.value);

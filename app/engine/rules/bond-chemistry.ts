@@ -1,4 +1,6 @@
+import type { BondState } from "../flow/bond.ts";
 import type { BondingMaterialInput } from "../flow/model.ts";
+import type { Resistances } from "../flow/handling-inputs.ts";
 import type { StepState } from "../flow/walk.ts";
 import { againstUpperLimit } from "./against-limit.ts";
 import type { Finding, RuleContext } from "./finding.ts";
@@ -12,8 +14,9 @@ const make = findingsOf(6, "Bonding material");
  * What vacuum, chemicals and light do to a bonding material at a step. A resistance that is not known leads to 'cannot judge':
  * whether the pair stays together hangs on it. What it stands is said in one finding.
  */
-export function bondChemistry(context: RuleContext, state: StepState, material: BondingMaterialInput): Finding[] {
-  const found = againstExposures(state.step, material.resistances, unasked(state, material));
+export function bondChemistry(context: RuleContext, state: StepState, bond: BondState): Finding[] {
+  const { material } = bond;
+  const found = againstExposures(state.step, resistancesIn(state, material), unasked(bond));
   const stood = found.filter(({ outcome }) => outcome === "clear");
   const faults = found.flatMap(({ exposure, outcome, says }) => {
     if (outcome === "clear") return [];
@@ -32,9 +35,19 @@ export function bondChemistry(context: RuleContext, state: StepState, material: 
  * What nobody asks of a bonding material unless its own data say something: plasma, which reaches its rim only, and light where
  * silicon keeps it off.
  */
-function unasked(state: StepState, { resistances }: BondingMaterialInput): DecidedExposure[] {
-  const seen = state.before.bond?.carrier.material === "glass";
-  return [...(resistances?.plasma ? [] : (["plasma"] as const)), ...(seen ? [] : (["ultraviolet light"] as const))];
+function unasked({ carrier, material }: BondState): DecidedExposure[] {
+  const seen = carrier.material === "glass";
+  return [
+    ...(material.resistances?.plasma ? [] : (["plasma"] as const)),
+    ...(seen ? [] : (["ultraviolet light"] as const)),
+  ];
+}
+
+/** What it stands. Its own remover takes it off before its debond too, as when the other face is cleaned of another bond. */
+function resistancesIn({ step }: StepState, { resistances, remover }: BondingMaterialInput): Resistances {
+  return remover && remover === step.solvent
+    ? { ...resistances, attackedBy: [...(resistances?.attackedBy ?? []), remover] }
+    : (resistances ?? {});
 }
 
 /** Outgassing: the temperature up to which it goes into vacuum, and the weight that it loses there. */

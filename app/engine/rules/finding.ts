@@ -1,3 +1,4 @@
+import type { BondSpan } from "../finder/bond-spans.ts";
 import type { FlowInput } from "../flow/model.ts";
 import type { StepState } from "../flow/walk.ts";
 import type { Outcome, SourceKind } from "../vocabulary.ts";
@@ -52,6 +53,8 @@ export interface RuleContext {
   uncertainty: StepUncertainty[];
   /** false leaves out the workings of shapes, which cost as much as the shapes: for trials that nobody looks at; default true */
   workings?: boolean;
+  /** the bond that a search tries others for: what only another bond is asked at a step that the choice leaves alone is left out */
+  tried?: BondSpan;
 }
 
 /** A handling rule. `judge` looks at one step and returns what it finds, nothing when the rule has no say there. */

@@ -1,3 +1,4 @@
+import type { BondState } from "../flow/bond.ts";
 import type { WaferState } from "../flow/state.ts";
 import { SILICON_DENSITY } from "../silicon/density.ts";
 
@@ -8,20 +9,18 @@ const BONDING_MATERIAL_DENSITY = 1100;
 export const USUAL_GLASS_DENSITY = 2500;
 
 /** Density of a bond's carrier, kg/m³; null for glass that has none given. */
-export function carrierDensity(bond: NonNullable<WaferState["bond"]>): number | null {
+export function carrierDensity(bond: BondState): number | null {
   if (bond.carrier.density) return bond.carrier.density.value;
   return bond.carrier.material === "silicon" ? SILICON_DENSITY : null;
 }
 
 /** Mass per area of a wafer with its carriers, kg/m², films left out (below 1 %); `glass` stands for an unknown density. */
-export function arealMass({ silicon, bond, transfer }: WaferState, glass: number): number {
-  return [bond, transfer].reduce(
-    (sum, pair) =>
-      pair === null
-        ? sum
-        : sum +
-          pair.carrier.thickness.value * (carrierDensity(pair) ?? glass) +
-          pair.thickness.value * BONDING_MATERIAL_DENSITY,
+export function arealMass({ silicon, bonds }: WaferState, glass: number): number {
+  return bonds.reduce(
+    (sum, bond) =>
+      sum +
+      bond.carrier.thickness.value * (carrierDensity(bond) ?? glass) +
+      bond.thickness.value * BONDING_MATERIAL_DENSITY,
     silicon.value * SILICON_DENSITY,
   );
 }

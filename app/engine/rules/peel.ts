@@ -1,25 +1,32 @@
+import type { BondState } from "../flow/bond.ts";
 import type { BondingMaterialInput } from "../flow/model.ts";
 import type { StepState } from "../flow/walk.ts";
-import { formatQuantity } from "../units/format.ts";
 import { againstUpperLimit } from "./against-limit.ts";
 import type { Finding, RuleContext } from "./finding.ts";
 import { findingsOf, statedLimit } from "./make-finding.ts";
-import { hasBumps } from "./solder.ts";
+import { forcePerWidth } from "./words.ts";
 
 const make = findingsOf(8, "Debond on tape or ring");
 
-const force = (value: number) => formatQuantity(value, "forcePerLength", { unit: "N/m" });
-
 /**
- * A peel pulls on the bumps and bends the silicon at its front. What is not known of either is a caution, never a silent pass;
- * the bend itself is judged by the holding rule where its radius is given.
+ * A peel pulls on the bumps (`bumped`: of the face that is peeled) and bends the silicon at its front; `left` is the bond that the
+ * wafer stays on. What is not known of either is a caution, never a silent pass; the bend itself is judged by the holding rule
+ * where its radius is given.
  */
-export function peel({ steps, limits }: RuleContext, state: StepState, material: BondingMaterialInput): Finding {
-  const bumps = hasBumps(steps, state);
-  const { peelForce, peelRadius } = material;
+export function peel(
+  { limits }: RuleContext,
+  state: StepState,
+  { peelForce, peelRadius }: BondingMaterialInput,
+  { bumped: bumps, left }: { bumped: boolean; left: BondState | null },
+): Finding {
   const stands = state.before.bumps?.standsPeelForce ?? null;
   const missing = [
-    ...(peelRadius ? [] : ["the bend radius at the peel front"]),
+    // On another carrier the wafer does not bend to the radius that it has on tape: the carriers bend.
+    ...(left
+      ? ["how far the two carriers bend at the peel front"]
+      : peelRadius
+        ? []
+        : ["the bend radius at the peel front"]),
     ...(bumps && !peelForce ? ["the peel force"] : []),
     ...(bumps && !stands ? ["the force that the bumps stand"] : []),
   ];
@@ -30,7 +37,7 @@ export function peel({ steps, limits }: RuleContext, state: StepState, material:
       return make(
         state,
         outcome,
-        `The peel pulls with ${force(peelForce.value)}; the bumps stood ${force(stands.value)} in a trial.`,
+        `The peel pulls with ${forcePerWidth(peelForce.value)}; the bumps stood ${forcePerWidth(stands.value)} in a trial.`,
         {
           remedy: "Peel with less force, or choose a bond that lets go by light or solvent.",
           figures: [{ label: "Peel force per width", value: peelForce.value, unit: "N/m" }],
@@ -47,8 +54,9 @@ export function peel({ steps, limits }: RuleContext, state: StepState, material:
     "caution",
     `It is peeled off: ${known} not given, so pull and bend at the peel front cannot be judged.`,
     {
-      remedy:
-        "Give the peel force and bend radius, check the peel force against the bumps, and the bend against the silicon left.",
+      remedy: left
+        ? "Let the first bond go by light or solvent, or show in a trial that carriers and silicon stand the bend of this peel."
+        : "Give the peel force and bend radius, check the peel force against the bumps, and the bend against the silicon left.",
     },
   );
 }

@@ -9,7 +9,6 @@ import type { FaceUp, Outcome } from "../vocabulary.ts";
 import { outcomeRank } from "../vocabulary.ts";
 import { againstUpperLimit, exceeds } from "./against-limit.ts";
 import type { Finding, Rule, RuleContext } from "./finding.ts";
-import { shapeIsKnown } from "./shape-known.ts";
 import { shareBeyond, sharedBy } from "./share-beyond.ts";
 import { shapeWorking } from "./warp-working.ts";
 
@@ -28,14 +27,13 @@ function moments({ steps, uncertainty }: RuleContext, state: StepState): Moment[
   const previous = steps[state.number - 2];
   const own = uncertainty[state.number - 1];
   const found: Moment[] = [];
-  if (previous?.atRoom && shapeIsKnown(previous.after))
+  if (previous?.atRoom)
     found.push({
       when: "as it is loaded",
       shape: previous.atRoom,
       faceUp: faceUpLoaded(state.before, state.step),
       uncertainty: uncertainty[previous.number - 1]?.atRoom ?? null,
     });
-  if (!shapeIsKnown(state.after)) return found;
   if (state.atRoom)
     found.push({
       when: "as it leaves",

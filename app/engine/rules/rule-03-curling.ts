@@ -1,9 +1,9 @@
 import type { LyingShape } from "../flow/shape.ts";
 import type { StepState } from "../flow/walk.ts";
 import { againstUpperLimit, exceeds } from "./against-limit.ts";
+import { isBonded, whatLies } from "./bonded.ts";
 import type { Figure, Finding, Rule, RuleContext } from "./finding.ts";
 import { findingsOf } from "./make-finding.ts";
-import { shapeIsKnown } from "./shape-known.ts";
 import { warpWorking } from "./warp-working.ts";
 import { height } from "./words.ts";
 import { formatQuantity } from "../units/format.ts";
@@ -21,7 +21,6 @@ const radius = (shape: LyingShape) =>
 
 /** Shapes that the step leaves free: at peak only where its tool does. A gripper holds a few places and lets it roll. */
 function freeShapes(state: StepState): LyingShape[] {
-  if (!shapeIsKnown(state.after)) return [];
   const shapes = state.atRoom ? [state.atRoom] : [];
   if (state.atPeak && state.step.equipment?.atPeak === "free") shapes.push(state.atPeak);
   return shapes;
@@ -59,12 +58,12 @@ function judge({ limits }: RuleContext, state: StepState): Finding[] {
     (most, shape) => (!most || shape.stabilityRatio > most.stabilityRatio ? shape : most),
     null,
   );
-  const held = state.after.bond !== null || state.atRoom === null;
+  const held = isBonded(state.after) || state.atRoom === null;
   const released = held ? ifReleased(state) : [];
   if (!worst) return released;
   const outcome = againstUpperLimit(worst.stabilityRatio, CRITICAL, CRITICAL - limits.curlMargin.value, "do not run");
   if (outcome === "clear") return released;
-  const what = state.after.bond ? "The pair" : "The wafer";
+  const what = whatLies(state.after);
   const load = `${ratio(worst.stabilityRatio)} times the load at which it rolls up`;
   const rolled = exceeds(worst.stabilityRatio, CRITICAL) && worst.rollRadius !== null;
   const reason = rolled
@@ -72,7 +71,7 @@ function judge({ limits }: RuleContext, state: StepState): Finding[] {
     : `${what} is free and carries ${load}.`;
   return [
     make(state, outcome, reason, {
-      remedy: state.after.bond
+      remedy: isBonded(state.after)
         ? "Choose a carrier or a bond that bows less, or leave more silicon."
         : "Plan tape, ring or carrier for this step, leave more silicon, or lower the film force.",
       figures: figuresOf(worst, "with working"),

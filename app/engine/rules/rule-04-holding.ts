@@ -2,16 +2,16 @@ import { chuckFlattening, type ChuckFlatteningInput } from "../chuck/chuck-flatt
 import { chuckSurfaceStressWorking } from "../chuck/working.ts";
 import type { EquipmentInput } from "../flow/model.ts";
 import { edgesUp, type LyingShape } from "../flow/shape.ts";
-import { faceUpLoaded, type WaferState } from "../flow/state.ts";
+import { bondLetGo, faceUpLoaded, type WaferState } from "../flow/state.ts";
 import type { StepState } from "../flow/walk.ts";
 import { siliconBiaxialModulus } from "../silicon/biaxial-modulus.ts";
 import { bendingStress } from "../strength/bending.ts";
 import { bendingStressWorking } from "../strength/working.ts";
 import { againstUpperLimit } from "./against-limit.ts";
+import { bondLeft, isBonded } from "./bonded.ts";
 import type { Figure, Finding, FindingLimit, Rule, RuleContext } from "./finding.ts";
 import type { LimitKey, SiteLimits } from "./limits.ts";
 import { findingsOf, siteLimit, statedLimit } from "./make-finding.ts";
-import { shapeIsKnown } from "./shape-known.ts";
 import { thinnest } from "./rule-01-thickness.ts";
 import { height, megapascals } from "./words.ts";
 
@@ -31,7 +31,7 @@ interface Loaded {
 /** The wafer as it comes to the tool; null when tape or frame holds it flat, and at the first step. */
 function asLoaded({ steps }: RuleContext, state: StepState): Loaded | null {
   const previous = steps[state.number - 2];
-  if (!previous?.atRoom || !shapeIsKnown(previous.after)) return null;
+  if (!previous?.atRoom) return null;
   return {
     shape: previous.atRoom,
     rimLifts: edgesUp(previous.atRoom, faceUpLoaded(state.before, state.step)),
@@ -86,7 +86,7 @@ const FLATTENS = ["vacuum", "full-area vacuum", "electrostatic", "clamp ring"];
 /** Bending from free to flat, Pa. A roll is opened as a cylinder of its own radius, a bowl as a sphere. */
 function flatteningFigure({ shape, wafer }: Loaded, radius: number, orientation: "100" | "111"): Figure {
   const label = "Bending stress from free to flat";
-  if (shape.rollRadius !== null && wafer.bond === null) {
+  if (shape.rollRadius !== null && !isBonded(wafer)) {
     const roll = { thickness: wafer.silicon.value, radiusOfCurvature: shape.rollRadius, direction: "110" as const };
     return { label, value: bendingStress(roll), unit: "Pa", working: bendingStressWorking(roll) };
   }
@@ -120,12 +120,15 @@ function stressed(
   );
 }
 
+/** Curvature, 1/m, of what is flat but for rounding, such as a wafer between two carriers that are alike: 10 pm over a wafer. */
+const FLAT = 1e-9;
+
 /** A stiff sphere of twice the curvature would still be clear: then the chuck's contact is not worth its time. */
 function farFromBreaking({ shape, wafer }: Loaded, radius: number, limits: SiteLimits): boolean {
-  if (shape.sagitta === 0) return true;
   const { limit, margin } = stressLimit(wafer, limits);
   const thickness = Math.max(shape.disc.thickness, wafer.silicon.value);
   const curvature = Math.max((2 * Math.abs(shape.sagitta)) / radius ** 2, 1 / (shape.rollRadius ?? Infinity));
+  if (curvature < FLAT) return true;
   if (2 * curvature * thickness > 1) return false;
   const stress = bendingStress({ thickness, radiusOfCurvature: 1 / (2 * curvature), direction: "biaxial" });
   return stress < limit.value - margin;
@@ -149,10 +152,10 @@ function flattening(context: RuleContext, state: StepState, loaded: Loaded): Fin
   return found.outcome === "clear" ? [] : [found];
 }
 
-/** The wafer bends at the peel front to the radius that the debonder gives it. */
+/** The wafer bends at the peel front to the radius that the debonder gives it, unless another carrier keeps it straight. */
 function peeling(context: RuleContext, state: StepState): Finding[] {
-  const material = state.step.kind === "debond" ? state.before.bond?.material : null;
-  if (!material?.release.includes("peel") || !material.peelRadius) return [];
+  const material = bondLetGo(state.before, state.step)?.material;
+  if (!material?.release.includes("peel") || !material.peelRadius || bondLeft(state)) return [];
   const bend = {
     thickness: Math.max(thinnest(state), 1e-9),
     radiusOfCurvature: material.peelRadius.value,

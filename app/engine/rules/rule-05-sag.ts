@@ -9,10 +9,10 @@ import type { StepState } from "../flow/walk.ts";
 import { SILICON_DENSITY } from "../silicon/density.ts";
 import { formatNumber } from "../units/format-number.ts";
 import { againstUpperLimit, exceeds } from "./against-limit.ts";
+import { isBonded, whatLies } from "./bonded.ts";
 import type { Finding, FindingLimit, Rule, RuleContext } from "./finding.ts";
 import { findingsOf, siteLimit, statedLimit } from "./make-finding.ts";
 import { arealMass, carrierDensity, USUAL_GLASS_DENSITY } from "./mass.ts";
-import { shapeIsKnown } from "./shape-known.ts";
 import { thinnest } from "./rule-01-thickness.ts";
 import { height, millimetres } from "./words.ts";
 
@@ -67,7 +67,7 @@ function clearanceOf({ flow, limits }: RuleContext, state: StepState, inSlots: b
 function plateOf({ flow }: RuleContext, state: StepState, shape: LyingShape, support: Support): GravitySagInput {
   const { diameter, orientation } = flow.wafer;
   const { youngsModulus, poissonsRatio } = siliconSagConstants(orientation, support);
-  const paired = state.after.bond !== null;
+  const paired = isBonded(state.after);
   const thickness = paired ? shape.disc.thickness : Math.max(thinnest(state), 1e-9);
   const density = paired ? arealMass(state.after, USUAL_GLASS_DENSITY) / thickness : SILICON_DENSITY;
   return { radius: diameter / 2, thickness, youngsModulus, poissonsRatio, density, support };
@@ -82,7 +82,7 @@ function sagging(context: RuleContext, state: StepState, shape: LyingShape): Fin
   const sag = gravitySag(plate);
   const least = sag.largeDeflection?.low ?? sag.peakToValley;
   const most = sag.peakToValley;
-  const paired = state.after.bond !== null;
+  const paired = isBonded(state.after);
   const { value } = clearance.limit;
   const fail = paired ? "do not run" : "needs support";
   // Between the two bounds of large deflections it may or may not fit.
@@ -94,7 +94,7 @@ function sagging(context: RuleContext, state: StepState, shape: LyingShape): Fin
     make(
       state,
       outcome,
-      `${paired ? "The pair" : "The wafer"} sags ${range} ${WORDS[support.kind]} and warps ${height(shape.warp)}; there are ${height(value)}.`,
+      `${whatLies(state.after)} sags ${range} ${WORDS[support.kind]} and warps ${height(shape.warp)}; there are ${height(value)}.`,
       {
         remedy: paired
           ? "Use every second slot, or a box with more clearance."
@@ -116,7 +116,7 @@ function weighing({ flow }: RuleContext, state: StepState): Finding[] {
   const tool = state.step.equipment;
   if (!tool?.weightLimit) return [];
   const limit = statedLimit(`${tool.name}, weight`, tool.weightLimit, "kg");
-  const unknown = [state.after.bond, state.after.transfer].find((bond) => bond && carrierDensity(bond) === null);
+  const unknown = state.after.bonds.find((bond) => carrierDensity(bond) === null);
   if (unknown)
     return [
       make(
@@ -141,10 +141,10 @@ function weighing({ flow }: RuleContext, state: StepState): Finding[] {
 }
 
 /** Silicon, films at their full height, bonding materials and carriers, m. */
-function totalThickness({ silicon, bond, transfer, ...wafer }: WaferState): number {
+function totalThickness({ silicon, bonds, ...wafer }: WaferState): number {
   const films = [...wafer.front, ...wafer.back].reduce((sum, { addition }) => sum + addition.thickness.value, 0);
-  return [bond, transfer].reduce(
-    (sum, pair) => sum + (pair ? pair.thickness.value + pair.carrier.thickness.value : 0),
+  return bonds.reduce(
+    (sum, { thickness, carrier }) => sum + thickness.value + carrier.thickness.value,
     silicon.value + films,
   );
 }
@@ -168,8 +168,7 @@ function judge(context: RuleContext, state: StepState): Finding[] {
   const shape = state.atRoom;
   // On tape or frame the robot carries the frame, whose limits are its own.
   if (!shape) return [];
-  const sag = shapeIsKnown(state.after) ? sagging(context, state, shape) : [];
-  return [...sag, ...weighing(context, state), ...measuring(state)];
+  return [...sagging(context, state, shape), ...weighing(context, state), ...measuring(state)];
 }
 
 export const sagRule: Rule = {

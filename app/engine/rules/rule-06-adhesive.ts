@@ -1,5 +1,5 @@
 import { provenance } from "../measured.ts";
-import { flowPoint, glassTransition } from "../flow/bond.ts";
+import { flowPoint, glassTransition, type BondState } from "../flow/bond.ts";
 import { timeAbove } from "../flow/temperature-profile.ts";
 import type { StepState } from "../flow/walk.ts";
 import { formatQuantity } from "../units/format.ts";
@@ -7,21 +7,21 @@ import type { Outcome } from "../vocabulary.ts";
 import { bondBudget } from "./bond-budget.ts";
 import { bondChemistry } from "./bond-chemistry.ts";
 import { bondThickness } from "./bond-thickness.ts";
+import { bondsAsked, bondsStaying } from "./bonded.ts";
 import { againstUpperLimit, exceeds, reaches } from "./against-limit.ts";
 import type { Finding, Rule, RuleContext } from "./finding.ts";
 import { celsius, duration } from "./words.ts";
 
 const TITLE = "Bonding material";
 
-/** The bond that the step's heat acts on: the one it comes with, not the one that this step makes or has just let go. */
-function bondUnderHeat(state: StepState) {
-  return state.step.kind === "bond" || state.step.kind === "debond" ? null : state.before.bond;
+/** The bonds that the step acts on: those that it comes with, not the one that it makes or lets go. */
+function judge(context: RuleContext, state: StepState): Finding[] {
+  const staying = bondsAsked(context, state, bondsStaying(state));
+  return [...bondThickness(state), ...staying.flatMap((bond) => judgeBond(context, state, bond))];
 }
 
-function judge(context: RuleContext, state: StepState): Finding[] {
+function judgeBond(context: RuleContext, state: StepState, bond: BondState): Finding[] {
   const { limits } = context;
-  const bond = bondUnderHeat(state);
-  if (!bond) return bondThickness(state);
   const { material } = bond;
   const peak = state.step.peakTemperature;
   const margin = limits.adhesiveMargin.value;
@@ -52,7 +52,7 @@ function judge(context: RuleContext, state: StepState): Finding[] {
   if (softensAt !== null && reaches(peak, softensAt)) findings.push(aboveSoftening(state, material, softensAt, make));
   const tooLong = beyondHoldTime(state, material, margin, make);
   if (tooLong) findings.push(tooLong);
-  return [...findings, ...bondChemistry(context, state, material), ...bondBudget(context, state, material)];
+  return [...findings, ...bondChemistry(context, state, bond), ...bondBudget(context, state, bond)];
 }
 
 /** A temperature limit holds for a time: near it, a longer hold is more than was tried. */
@@ -73,7 +73,7 @@ function beyondHoldTime(
   );
 }
 
-type BondMaterial = NonNullable<StepState["before"]["bond"]>["material"];
+type BondMaterial = BondState["material"];
 type MakeFinding = (outcome: Outcome, reason: string, remedy: string | null) => Finding;
 
 function againstTemperatureLimit(
@@ -119,7 +119,7 @@ function aboveSoftening(state: StepState, material: BondMaterial, softensAt: num
 export const adhesiveRule: Rule = {
   number: 6,
   title: TITLE,
-  asks: "Is the bond as thick as its material is made for? Does the material stay below its temperature limit with its margin and hold time, and below the point where it flows; does it stand the vacuum, chemicals and light of every step between bond and debond, and all their heat together?",
+  asks: "Is each bond as thick as its material is made for? Does each bonding material that is there stay below its temperature limit with its margin and hold time, and below the point where it flows; does it stand the vacuum, chemicals and light of every step between its bond and its debond, and all their heat together?",
   limits: ["adhesiveMargin", "weightLossClear", "weightLoss", "heatingFrom"],
   judge,
 };

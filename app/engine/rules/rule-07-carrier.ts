@@ -1,8 +1,11 @@
 import { edgesUp, type LyingShape } from "../flow/shape.ts";
 import type { BondState } from "../flow/bond.ts";
+import type { CarrierInput } from "../flow/model.ts";
+import { bondLetGo } from "../flow/state.ts";
 import type { StepState } from "../flow/walk.ts";
 import { standardBow } from "../stoney/bow.ts";
 import { againstUpperLimit, exceeds } from "./against-limit.ts";
+import { bondMade, bondsAsked } from "./bonded.ts";
 import type { Finding, Rule, RuleContext } from "./finding.ts";
 import { findingsOf, siteLimit, statedLimit, temperatureFigure } from "./make-finding.ts";
 import { releasePath } from "./release-path.ts";
@@ -25,7 +28,7 @@ function pairBow(context: RuleContext, state: StepState, shape: LyingShape, { ca
     { label: "Bow, device side up", value: standardBow(shape.sagitta), unit: "m" },
   ];
   const how = exceeds(shape.warp, limits.flatWithin.value) ? direction : "flat,";
-  const lies = `On ${carrier.name} the pair lies ${how} ${wholeMicrometres(shape.warp)} at 25\u00a0°C`;
+  const lies = `${where(state, carrier)} lies ${how} ${wholeMicrometres(shape.warp)} at 25\u00a0°C`;
   // Without a tool or its limit the warp rule says what is missing.
   if (!tool || !limit) return [];
   const outcome = againstUpperLimit(shape.warp, limit.value, limit.value * limits.warpMargin.value, "do not run");
@@ -37,6 +40,12 @@ function pairBow(context: RuleContext, state: StepState, shape: LyingShape, { ca
       limit: statedLimit(`${tool.name}, ${direction}`, limit, "m"),
     }),
   ];
+}
+
+/** 'On Glass the pair', 'Between Glass and Silicon it'. */
+function where({ after: { bonds } }: StepState, made: CarrierInput): string {
+  const other = bonds.find(({ carrier }) => carrier !== made);
+  return bonds.length > 1 ? `Between ${(other?.carrier ?? made).name} and ${made.name} it` : `On ${made.name} the pair`;
 }
 
 /** A carrier smaller than the wafer holds it only when the trim takes off what hangs over. */
@@ -158,24 +167,28 @@ function printThrough({ limits }: RuleContext, state: StepState, { carrier }: Bo
 }
 
 function judge(context: RuleContext, state: StepState): Finding[] {
-  const { step, before, after } = state;
-  const made = step.kind === "bond" ? (after.transfer ?? (before.bond ? null : after.bond)) : null;
-  const bond = before.bond ?? after.bond;
-  if (!bond) return [];
-  const atBond = made
-    ? [
-        ...(state.atRoom && !after.transfer ? pairBow(context, state, state.atRoom, made) : []),
-        ...diameter(context, state, made),
-        ...reuse(context, state, made),
-      ]
-    : [];
+  const { step, before } = state;
+  const made = bondMade(state);
+  const all = made ? [...before.bonds, made] : before.bonds;
+  const bonds = bondsAsked(context, state, all);
+  // What holds it from below is what was bonded last.
+  const below = all.slice(-1).filter((bond) => bonds.includes(bond));
+  const atBond =
+    made && bonds.includes(made)
+      ? [
+          ...(state.atRoom ? pairBow(context, state, state.atRoom, made) : []),
+          ...diameter(context, state, made),
+          ...reuse(context, state, made),
+        ]
+      : [];
+  const released = bondLetGo(before, step);
   return [
     ...atBond,
-    ...heat(state, made ?? bond),
-    ...clamping(state, made ?? bond),
-    ...sensing(state, made ?? bond),
-    ...printThrough(context, state, bond),
-    ...(step.kind === "debond" && before.bond ? releasePath(state, before.bond) : []),
+    ...bonds.flatMap((bond) => heat(state, bond)),
+    ...below.flatMap((bond) => clamping(state, bond)),
+    ...bonds.flatMap((bond) => sensing(state, bond)),
+    ...bonds.flatMap((bond) => printThrough(context, state, bond)),
+    ...(released && bonds.includes(released) ? releasePath(state, released) : []),
   ];
 }
 

@@ -1,9 +1,13 @@
+import { bondedFace, type BondState } from "../flow/bond.ts";
+import { bondLetGo } from "../flow/state.ts";
 import type { StepState } from "../flow/walk.ts";
 import { ROOM_TEMPERATURE } from "../laminate/layer.ts";
 import { supportRank } from "../vocabulary.ts";
 import { againstUpperLimit, exceeds } from "./against-limit.ts";
+import { bondLeft, isBonded } from "./bonded.ts";
 import type { Finding, Rule, RuleContext } from "./finding.ts";
 import { findingsOf, statedLimit, temperatureFigure } from "./make-finding.ts";
+import { staysOn } from "./other-carrier.ts";
 import { peel } from "./peel.ts";
 import { againstExposures } from "./resistance.ts";
 import { requiredAt, thinnest } from "./rule-01-thickness.ts";
@@ -19,19 +23,22 @@ function judge(context: RuleContext, state: StepState): Finding[] {
   const { kind } = state.step;
   if (kind === "mount on frame") return mounting(context, state);
   if (kind === "clean") return remover(context, state);
-  if (kind !== "debond" || !state.before.bond) return [];
-  const { release } = state.before.bond.material;
+  const released = bondLetGo(state.before, state.step);
+  if (!released) return [];
+  const { release } = released.material;
+  const left = bondLeft(state);
+  const bumped = bondedFace(released) === "front" && hasBumps(context.steps, state);
   return [
-    ...(state.before.transfer ? [] : [leavesCarrier(context, state)]),
+    ...(left ? staysOn(state, released, left) : [leavesCarrier(context, state)]),
     ...(onTape(state.before) ? [heatOnTape(context, state)] : []),
     ...heatOnSolder(context, state),
-    ...(release.includes("peel") ? [peel(context, state, state.before.bond.material)] : []),
-    ...(release === "thermal slide" && hasBumps(context.steps, state) ? [slide(state)] : []),
+    ...(release.includes("peel") ? [peel(context, state, released.material, { bumped, left })] : []),
+    ...(release === "thermal slide" && bumped ? [slide(state, released)] : []),
   ];
 }
 
 function mounting(context: RuleContext, state: StepState): Finding[] {
-  if (state.before.bond) return [make(state, "clear", `On ${state.after.mount} before it leaves its carrier.`)];
+  if (isBonded(state.before)) return [make(state, "clear", `On ${state.after.mount} before it leaves its carrier.`)];
   if (state.before.mount !== "grinding tape") return [];
   if (state.step.inLine !== false)
     return [make(state, "clear", "From grinding tape to frame in line: it is never free between the two.")];
@@ -102,9 +109,9 @@ function heatOnSolder({ limits }: RuleContext, state: StepState): Finding[] {
 }
 
 /** A slide drags what stands in the adhesive. */
-function slide(state: StepState): Finding {
-  const { bumps, bond } = state.before;
-  const embedded = bumps && bond ? ` ${micrometres(Math.min(bumps.height.value, bond.thickness.value))} deep` : "";
+function slide(state: StepState, { thickness }: BondState): Finding {
+  const { bumps } = state.before;
+  const embedded = bumps ? ` ${micrometres(Math.min(bumps.height.value, thickness.value))} deep` : "";
   return make(state, "caution", `The slide drags bumps that are embedded${embedded} in the bonding material.`, {
     remedy: "Choose a bonding material that lets go by light, solvent or peel.",
     figures: bumps ? [{ label: "Bump height", value: bumps.height.value, unit: "m" }] : [],
@@ -139,7 +146,7 @@ function remover({ steps }: RuleContext, state: StepState): Finding[] {
 export const debondRule: Rule = {
   number: 8,
   title: TITLE,
-  asks: "Is a thin wafer on tape or ring before it leaves its carrier, never free between tape and frame; do the tape and the solder stand the debond's heat, the tape the remover, and the bumps the peel or slide?",
+  asks: "Is a thin wafer on tape, ring or another carrier before it leaves its carrier, never free between tape and frame; do the tape and the solder stand the debond's heat, the tape the remover, and the bumps the peel or slide; does the bond that is to stay hold when the other is let go?",
   limits: ["tapeTemperature", "solderMargin", "warpMargin"],
   judge,
 };

@@ -1,107 +1,16 @@
 import type { Measured } from "../measured.ts";
-import type { BondState } from "../flow/bond.ts";
+import { bondOn, type BondState } from "../flow/bond.ts";
 import type { StepState } from "../flow/walk.ts";
-import { bumpCover } from "../thickness-budget/bump-cover.ts";
 import { thicknessBudget, type ThicknessContribution } from "../thickness-budget/thickness-budget.ts";
-import { bumpCoverWorking, thicknessBudgetWorking } from "../thickness-budget/working.ts";
-import { outcomeRank, type Outcome } from "../vocabulary.ts";
-import { againstLowerLimit, againstUpperLimit, exceeds } from "./against-limit.ts";
+import { thicknessBudgetWorking } from "../thickness-budget/working.ts";
+import { againstUpperLimit, exceeds } from "./against-limit.ts";
+import { covering } from "./cover.ts";
 import type { Finding, FindingLimit, Rule, RuleContext } from "./finding.ts";
-import { findingsOf, siteLimit } from "./make-finding.ts";
-import { hasBumps } from "./solder.ts";
-import { micrometres, percent } from "./words.ts";
+import { findingsOf } from "./make-finding.ts";
+import { micrometres } from "./words.ts";
 
 const TITLE = "Cover and thickness budget";
 const make = findingsOf(9, TITLE);
-
-const worse = (a: Outcome, b: Outcome) => (outcomeRank(b) > outcomeRank(a) ? b : a);
-
-/** What a bond or a grinding tape has to take up, and what it has for it. */
-interface Cover {
-  feature: Measured;
-  featureName: string;
-  cover: number;
-  coverName: string;
-}
-
-/** Tallest feature of the device side, bumps first; null when none is known. */
-function tallest({ after: { bumps, topography } }: StepState): Pick<Cover, "feature" | "featureName"> | null {
-  if (bumps) return { feature: bumps.height, featureName: "Bumps" };
-  return topography && { feature: topography, featureName: "Topography" };
-}
-
-function unknownHeight(state: StepState): Finding {
-  return make(state, "cannot judge", "There are bumps on the device side and their height is not given.", {
-    remedy: "Give the height of the bumps at the step that makes them.",
-  });
-}
-
-/** A bond covers the face that it is on, a grinding tape the device side. */
-function covering({ steps, limits }: RuleContext, state: StepState): Finding[] {
-  const { step, before } = state;
-  const feature = tallest(state);
-  if (step.kind === "bond" && step.bond && (step.bond.face ?? "front") === "front" && !before.bond) {
-    if (feature)
-      return [
-        against(state, limits, { ...feature, cover: step.bond.thickness.value, coverName: step.bond.material.name }),
-      ];
-    return hasBumps(steps, state) ? [unknownHeight(state)] : [];
-  }
-  if (step.kind !== "laminate tape") return [];
-  if (!state.after.bumps) return hasBumps(steps, state) ? [unknownHeight(state)] : [];
-  if (!feature) return [];
-  const depth = step.tape?.embeddingDepth;
-  if (!depth)
-    return [
-      make(
-        state,
-        "cannot judge",
-        `Bumps of ${micrometres(feature.feature.value)} go into the grinding tape, and the depth that it takes up is not given.`,
-        { remedy: "Give the depth of the tape's embedding layer, zero when it has none." },
-      ),
-    ];
-  if (!(depth.value > 0))
-    return [
-      make(
-        state,
-        "do not run",
-        `The grinding tape takes up no bumps; here they are ${micrometres(feature.feature.value)} high.`,
-        {
-          remedy: "Use a tape with an embedding layer, or grind before the bumps are made.",
-        },
-      ),
-    ];
-  return [against(state, limits, { ...feature, cover: depth.value, coverName: "the embedding layer" })];
-}
-
-/** Over the share is a caution while enough is left over the bumps; too little left fails. Tallest: height plus tolerance. */
-function against(
-  state: StepState,
-  limits: RuleContext["limits"],
-  { feature, featureName, cover, coverName }: Cover,
-): Finding {
-  const height = feature.value + (feature.tolerance ?? 0);
-  const input = { bumpHeight: height, adhesiveThickness: cover };
-  const { ratio, left } = bumpCover(input);
-  const byShare = againstUpperLimit(ratio, limits.coverShare.value, 0, "caution");
-  const { coverLeft, coverLeftClear } = limits;
-  const byLeft = againstLowerLimit(left, coverLeft.value, coverLeftClear.value - coverLeft.value, "do not run");
-  const outcome = worse(byShare, byLeft);
-  const covered = `${featureName} of ${micrometres(height)} in ${micrometres(cover)} of ${coverName}: ${percent(ratio)}`;
-  return make(
-    state,
-    outcome,
-    exceeds(0, left) ? `${covered}, so they stand out.` : `${covered}, ${micrometres(left)} left over them.`,
-    {
-      remedy: `Cover them thicker, at least ${micrometres(Math.max(height / limits.coverShare.value, height + coverLeftClear.value))}, or make them lower.`,
-      figures: [
-        { label: "Share of the cover that they take", value: ratio, unit: "1", working: bumpCoverWorking(input) },
-        { label: "Left over them", value: left, unit: "m" },
-      ],
-      limit: siteLimit(limits, outcomeRank(byLeft) > outcomeRank(byShare) ? "coverLeft" : "coverShare"),
-    },
-  );
-}
 
 const THINS = ["grind", "stress relief", "polish", "via reveal"];
 
@@ -130,7 +39,9 @@ const adhesiveVariation = ({ thicknessVariation, thickness, material }: BondStat
 
 function budget(context: RuleContext, state: StepState): Finding[] {
   if (!isFinalThinning(context, state)) return [];
-  const { bond, tape } = state.after;
+  const { bonds, tape } = state.after;
+  // It is thinned from its back side, so the carrier of its device side is what it stands on.
+  const bond = bondOn(bonds, "front");
   const grind = grindVariation(context, state)?.value ?? null;
   const parts: { name: string; variation: number | null }[] = bond
     ? [
@@ -203,7 +114,7 @@ function inBudget(state: StepState, contributions: ThicknessContribution[], miss
 export const coverRule: Rule = {
   number: 9,
   title: TITLE,
-  asks: "Is what stands on the device side covered by adhesive or embedding layer, with enough left over it, and does the thickness variation of carrier, adhesive and grind stay within a tenth of the final silicon and the protrusion of its vias?",
+  asks: "Is what stands on the face that is bonded or taped covered by adhesive or embedding layer, with enough left over it, and does the thickness variation of carrier, adhesive and grind stay within a tenth of the final silicon and the protrusion of its vias?",
   limits: ["coverShare", "coverLeft", "coverLeftClear"],
   judge: (context, state) => [...covering(context, state), ...budget(context, state)],
 };

@@ -1,23 +1,16 @@
 import type { StepState } from "../flow/walk.ts";
-import { allFilms, bondedFace } from "../flow/state.ts";
+import { bondedFace } from "../flow/bond.ts";
+import { allFilms, bondLetGo } from "../flow/state.ts";
 import { inSentence } from "../in-sentence.ts";
-import type { Outcome } from "../vocabulary.ts";
+import { SIDE_NAMES } from "../vocabulary.ts";
 import { againstUpperLimit, exceeds } from "./against-limit.ts";
+import { BOND_CHECKS, carriersOf, type Check } from "./bond-order.ts";
+import { isBonded } from "./bonded.ts";
 import type { Finding, Rule, RuleContext } from "./finding.ts";
 import { tapeHeatLimit } from "./tape.ts";
 import { celsius, micrometres as um, millimetres as mm } from "./words.ts";
 
 const TITLE = "Order of the steps";
-
-interface Fault {
-  /** default: do not run */
-  outcome?: Outcome;
-  reason: string;
-  remedy: string;
-}
-
-/** One thing that an order of steps can get wrong; null when this step does not. */
-type Check = (state: StepState, context: RuleContext) => Fault | null;
 
 const growsSilicon: Check = ({ step, before }) =>
   step.siliconAfter && exceeds(step.siliconAfter.value, before.silicon.value)
@@ -27,37 +20,13 @@ const growsSilicon: Check = ({ step, before }) =>
       }
     : null;
 
-const debondsUnbonded: Check = ({ step, before }) =>
-  step.kind === "debond" && !before.bond
-    ? {
-        reason: "There is nothing to debond: the wafer is not bonded here.",
-        remedy: "Add the bond before, or leave the debond out.",
-      }
-    : null;
-
-/** A second carrier on the other face is a transfer; it comes before the first one goes. */
-const bondsTwice: Check = ({ step, before: { bond, transfer } }) => {
-  if (step.kind !== "bond" || !bond) return null;
-  if (transfer)
-    return {
-      reason: `It already has two carriers, ${bond.carrier.name} and ${transfer.carrier.name}.`,
-      remedy: "Debond the first one before another bond.",
-    };
-  return !step.bond || bondedFace(step.bond) === bondedFace(bond)
-    ? {
-        reason: `It is already bonded to ${bond.carrier.name}.`,
-        remedy: "Debond first, or bond the other face for a transfer.",
-      }
-    : null;
-};
-
 const bondsToNothing: Check = ({ step }) =>
   step.kind === "bond" && !step.bond
     ? { reason: "No carrier and bonding material are chosen.", remedy: "Choose both at this step." }
     : null;
 
 const plannedCarrierMissing: Check = ({ step, after }) =>
-  step.planned === "carrier" && !after.bond
+  step.planned === "carrier" && !isBonded(after)
     ? {
         reason: "A carrier is planned, but the wafer is not bonded to one here.",
         remedy: "Add the bond before this step, or plan another support.",
@@ -65,9 +34,9 @@ const plannedCarrierMissing: Check = ({ step, after }) =>
     : null;
 
 const leavesCarrierUnnoticed: Check = ({ step, after }) =>
-  after.bond && step.planned !== "carrier"
+  isBonded(after) && step.planned !== "carrier"
     ? {
-        reason: `It is still bonded to ${after.bond.carrier.name}, but ${step.planned} is planned.`,
+        reason: `It is still bonded to ${carriersOf(after.bonds)}, but ${step.planned} is planned.`,
         remedy: "Plan the carrier here, or debond before this step.",
       }
     : null;
@@ -75,7 +44,7 @@ const leavesCarrierUnnoticed: Check = ({ step, after }) =>
 const plannedMountMissing: Check = ({ step, after }) =>
   (step.planned === "grinding tape" || step.planned === "film frame" || step.planned === "edge ring") &&
   after.mount !== step.planned &&
-  !after.bond
+  !isBonded(after)
     ? {
         reason: `${step.planned === "edge ring" ? "An" : "A"} ${step.planned} is planned, but the wafer was not put on one.`,
         remedy: step.planned === "grinding tape" ? "Laminate the tape before this step." : "Mount it before this step.",
@@ -154,8 +123,8 @@ const removesWhatIsNotThere: Check = ({ step, before }) => {
 const doesNotFitTool: Check = ({ step, after }, { flow }) => {
   if (!step.equipment) return null;
   const most = step.equipment.largestDiameter.value;
-  const carrier = after.bond?.carrier;
-  if (carrier && exceeds(carrier.diameter, most))
+  const carrier = after.bonds.map((bond) => bond.carrier).find(({ diameter }) => exceeds(diameter, most));
+  if (carrier)
     return {
       reason: `${carrier.name} measures ${mm(carrier.diameter)}; ${inSentence(step.equipment.name)} takes ${mm(most)}.`,
       remedy: "Choose a carrier or a tool of the same size.",
@@ -182,8 +151,7 @@ const carrierTooSmall: Check = ({ step, before }, { flow }) => {
 const CHECKS: Check[] = [
   growsSilicon,
   bondsToNothing,
-  bondsTwice,
-  debondsUnbonded,
+  ...BOND_CHECKS,
   carrierTooSmall,
   doesNotFitTool,
   plannedCarrierMissing,
@@ -198,14 +166,15 @@ const CHECKS: Check[] = [
 
 /** After a debond the next wet step must take the adhesive off before anything else is done to that face. */
 function cleanAfterDebond({ steps }: RuleContext, state: StepState): Finding | null {
-  if (state.step.kind !== "debond" || !state.before.bond) return null;
+  const released = bondLetGo(state.before, state.step);
+  if (!released) return null;
   const later = steps.slice(state.number);
   const next = later.find(({ step }) => !["move", "store", "hold", "measure"].includes(step.kind));
   if (next?.step.kind === "clean") return null;
   return finding(
     state,
     "caution",
-    "No cleaning step follows the debond: the adhesive stays on the device side.",
+    `No cleaning step follows the debond: the adhesive stays on the ${SIDE_NAMES[bondedFace(released)]}.`,
     "Add a clean after the debond.",
   );
 }
@@ -227,7 +196,7 @@ function judge(context: RuleContext, state: StepState): Finding[] {
 export const orderRule: Rule = {
   number: 12,
   title: TITLE,
-  asks: "Can the steps be done in this order: nothing below zero, nothing unmounted diced, debond of what is bonded, clean after debond, tape off before heat or vacuum, trim before grind, a second carrier only on the other face, and does the wafer or its carrier fit the tool?",
+  asks: "Can the steps be done in this order: nothing below zero, nothing unmounted diced, debond of what is bonded and of the face that is said, nothing done under a carrier, clean after debond, tape off before heat or vacuum, trim before grind, a second carrier only on the other face, and does the wafer or its carrier fit the tool?",
   limits: ["tapeTemperature"],
   judge,
 };

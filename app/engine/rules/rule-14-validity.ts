@@ -1,12 +1,13 @@
 import { glassTransition } from "../flow/bond.ts";
 import type { StepState } from "../flow/walk.ts";
+import { inSentence } from "../in-sentence.ts";
 import { siliconBiaxialModulus } from "../silicon/biaxial-modulus.ts";
 import { stoneyCurvature } from "../stoney/stoney.ts";
 import { stoneyCurvatureWorking } from "../stoney/working.ts";
 import { reaches } from "./against-limit.ts";
+import { bondsStaying, isBonded, whatLies } from "./bonded.ts";
 import type { Finding, Rule, RuleContext } from "./finding.ts";
 import { findingsOf, siteLimit } from "./make-finding.ts";
-import { shapeIsKnown } from "./shape-known.ts";
 import { celsius, percent } from "./words.ts";
 
 const TITLE = "Validity of the model";
@@ -19,7 +20,7 @@ const THIN = 1e-6;
 function thinFilm({ flow, limits }: RuleContext, state: StepState): Finding[] {
   const { atRoom, after, step, filmForce } = state;
   // The shape that a wafer came in with is no film's, so the film forces alone do not make the bow.
-  if (!atRoom || after.bond || after.incoming || step.adds.length === 0 || atRoom.warp <= limits.flatWithin.value)
+  if (!atRoom || isBonded(after) || after.incoming || step.adds.length === 0 || atRoom.warp <= limits.flatWithin.value)
     return [];
   const input = {
     filmStress: (filmForce.front - filmForce.back) / THIN,
@@ -54,7 +55,7 @@ function thinFilm({ flow, limits }: RuleContext, state: StepState): Finding[] {
 /** A roll that closes is beyond what the shape can say. */
 function closedRoll({ flow }: RuleContext, state: StepState): Finding[] {
   const shape = state.atRoom;
-  if (!shape?.rollRadius || state.after.bond || flow.wafer.diameter / 2 < Math.PI * shape.rollRadius) return [];
+  if (!shape?.rollRadius || isBonded(state.after) || flow.wafer.diameter / 2 < Math.PI * shape.rollRadius) return [];
   return [
     make(
       state,
@@ -69,33 +70,26 @@ function closedRoll({ flow }: RuleContext, state: StepState): Finding[] {
 }
 
 /** Above its softening point a bonding material creeps: the pair's shape there depends on how long it is hot. */
-function softBond({ step, atPeak, after, before }: StepState): string | null {
-  const softening = before.bond && after.bond ? glassTransition(after.bond.material) : null;
-  if (softening === null || !atPeak || step.equipment?.atPeak !== "free" || !reaches(step.peakTemperature, softening))
-    return null;
-  return `At ${celsius(step.peakTemperature)} the bonding material is above its softening point, ${celsius(softening)}: the shape of the pair at peak is informative only.`;
-}
-
-function judge(context: RuleContext, state: StepState): Finding[] {
-  if (!shapeIsKnown(state.after))
+function softBond(state: StepState): Finding[] {
+  const { step, atPeak, after } = state;
+  if (!atPeak || step.equipment?.atPeak !== "free") return [];
+  const names = after.bonds.length > 1;
+  return bondsStaying(state).flatMap(({ material }) => {
+    const softening = glassTransition(material);
+    if (softening === null || !reaches(step.peakTemperature, softening)) return [];
     return [
       make(
         state,
-        "cannot judge",
-        state.after.transfer
-          ? "The wafer is between two carriers: the shape of three is not computed here."
-          : "The pair is bonded by its back side: its shape is not computed here.",
-        { remedy: "Measure the bow of the pair at this step and hold it against the tool's limit." },
+        "caution",
+        `At ${celsius(step.peakTemperature)} ${names ? material.name : "the bonding material"} is above its softening point, ${celsius(softening)}: the shape of ${inSentence(whatLies(after))} at peak is informative only.`,
+        { remedy: "Measure the pair at peak, or hold it flat while it is hot." },
       ),
     ];
-  const soft = softBond(state);
-  return [
-    ...thinFilm(context, state),
-    ...closedRoll(context, state),
-    ...(soft
-      ? [make(state, "caution", soft, { remedy: "Measure the pair at peak, or hold it flat while it is hot." })]
-      : []),
-  ];
+  });
+}
+
+function judge(context: RuleContext, state: StepState): Finding[] {
+  return [...thinFilm(context, state), ...closedRoll(context, state), ...softBond(state)];
 }
 
 export const validityRule: Rule = {

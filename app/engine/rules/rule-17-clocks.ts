@@ -3,6 +3,7 @@ import { allFilms } from "../flow/state.ts";
 import { heatDuration } from "../flow/temperature-profile.ts";
 import type { StepState } from "../flow/walk.ts";
 import { againstUpperLimit, exceeds, reaches } from "./against-limit.ts";
+import { isBonded } from "./bonded.ts";
 import type { Finding, FindingLimit, Rule, RuleContext } from "./finding.ts";
 import type { LimitKey } from "./limits.ts";
 import { findingsOf, siteLimit, statedLimit } from "./make-finding.ts";
@@ -140,8 +141,8 @@ function moisture(context: RuleContext, state: StepState): Finding[] {
   const { step, before } = state;
   if (!step.exposures.includes("vacuum")) return [];
   const polymer = allFilms(before).some(({ addition: { film } }) => film.kind === "polymer");
-  if (!polymer && !before.bond) return [];
-  const what = before.bond ? "The bonding material" : "The polymer";
+  if (!polymer && !isBonded(before)) return [];
+  const what = isBonded(before) ? "The bonding material" : "The polymer";
   const limit = siteLimit(context.limits, "dryFor");
   const remedy = "Bake it dry before this step.";
   if (step.dehydrationBake === true) return [make(state, "clear", `${what} is baked dry before the vacuum.`)];

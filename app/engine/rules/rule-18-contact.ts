@@ -1,4 +1,5 @@
-import { bondedFace } from "../flow/state.ts";
+import { bondOn } from "../flow/bond.ts";
+import { bondLetGo } from "../flow/state.ts";
 import type { StepState } from "../flow/walk.ts";
 import type { Finding, Rule, RuleContext } from "./finding.ts";
 import { findingsOf } from "./make-finding.ts";
@@ -8,8 +9,8 @@ const TITLE = "Contact and charge";
 const make = findingsOf(18, TITLE);
 
 /** Whether adhesive or tape covers the device side while the step touches it. */
-function deviceSideCovered({ after: { bond, transfer, mount } }: StepState): boolean {
-  return [bond, transfer].some((pair) => pair !== null && bondedFace(pair) === "front") || mount === "grinding tape";
+function deviceSideCovered({ after: { bonds, mountedSide } }: StepState): boolean {
+  return bondOn(bonds, "front") !== null || mountedSide === "front";
 }
 
 function touched(context: RuleContext, state: StepState): Finding[] {
@@ -28,7 +29,7 @@ function touched(context: RuleContext, state: StepState): Finding[] {
 function charged(state: StepState): Finding[] {
   const { step, before } = state;
   const peels =
-    (step.kind === "debond" && before.bond?.material.release.includes("peel") === true) ||
+    bondLetGo(before, step)?.material.release.includes("peel") === true ||
     (step.kind === "mount on frame" && before.mount === "grinding tape");
   if (!peels) return [];
   const tool = step.equipment;

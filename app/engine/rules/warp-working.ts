@@ -10,9 +10,18 @@ export function warpWorking(shape: LyingShape): Working {
   return { ...freeWaferShapeWorking(shape.disc), from: laminateWorkings(shape) };
 }
 
-/** The sliding carrier of a pair whose directions differ is left out of its working: the wafer's own curvatures are shown. */
+/** Sliding carriers of a wafer whose directions differ are left out of its working: the wafer's own curvatures are shown. */
 function laminateWorkings({ layers, unequal, temperature, slidingOn }: LyingShape): Working[] {
-  if (!unequal) return [laminateWorking(layers, slidingOn ? { temperature, slidingOn } : { temperature })];
+  if (!unequal) {
+    const [one, other] = slidingOn?.map((plate) => [plate]) ?? [];
+    return [
+      laminateWorking(layers, {
+        temperature,
+        ...(one ? { slidingOn: one } : {}),
+        ...(other ? { alsoSlidingOn: other } : {}),
+      }),
+    ];
+  }
   return (["curvatureX", "curvatureY"] as const).map((part) =>
     directionalLaminateWorking(unequal.layers, part, { temperature }),
   );

@@ -16,6 +16,7 @@ export const kelvins = (difference: number) =>
   formatQuantity(difference, "temperatureDifference", { unit: "K", decimals: 0 });
 export const megapascals = (value: number) =>
   formatQuantity(value, "stress", { unit: "MPa", significant: 3, trim: true });
+export const forcePerWidth = (value: number) => formatQuantity(value, "forcePerLength", { unit: "N/m" });
 export const percent = (share: number) => formatQuantity(share, "fraction", { unit: "%", significant: 2, trim: true });
 export const duration = (seconds: number) => formatQuantity(seconds, "time", { significant: 3, trim: true });
 

@@ -1,12 +1,13 @@
 import { answerSentences } from "#app/engine/flow/answer.ts";
 import type { AssessedStep, FlowAssessment } from "#app/engine/flow/assess.ts";
+import { bondedFace, bondOn } from "#app/engine/flow/bond.ts";
 import type { FlowInput } from "#app/engine/flow/model.ts";
 import { edgesUp, type LyingShape } from "#app/engine/flow/shape.ts";
 import { faceUpLoaded } from "#app/engine/flow/state.ts";
 import type { SiteLimits } from "#app/engine/rules/limits.ts";
 import { warpWorking } from "#app/engine/rules/warp-working.ts";
 import { standardBow } from "#app/engine/stoney/bow.ts";
-import type { FaceUp } from "#app/engine/vocabulary.ts";
+import type { FaceUp, Side } from "#app/engine/vocabulary.ts";
 import { given } from "#app/lib/given.ts";
 import type { AssessmentResult, BondResult, ShapeResult, StepResult } from "#app/schemas/assessment-result.ts";
 
@@ -53,7 +54,10 @@ function stepResult({ state, required, outcome, uncertainty, budget }: AssessedS
     siliconLeast: after.silicon.value - (after.silicon.tolerance ?? 0),
     siliconTolerance: after.silicon.tolerance,
     planned: step.planned,
-    plannedName: step.planned === "carrier" && after.bond ? after.bond.carrier.name : step.planned,
+    plannedName:
+      step.planned === "carrier" && after.bonds.length > 0
+        ? after.bonds.map(({ carrier }) => carrier.name).join(" and ")
+        : step.planned,
     required: required ?? "none fits",
     faceUp: after.faceUp,
     ...(loaded === before.faceUp ? {} : { loadedFaceUp: loaded }),
@@ -88,20 +92,23 @@ function shapeResult(
   };
 }
 
-/** Every bond of the flow with the steps over which it lasts. */
+/** Every bond of the flow with its face and the steps over which it lasts. */
 function bondsOf(steps: AssessedStep[]): BondResult[] {
   const bonds: BondResult[] = [];
-  let open: BondResult | null = null;
+  const open = new Map<Side, BondResult>();
   for (const { state } of steps) {
-    const { bond } = state.after;
-    if (!bond) {
-      open = null;
-    } else if (open) {
-      open.toStep = state.number;
-    } else {
-      open = {
+    for (const face of [...open.keys()]) if (!bondOn(state.after.bonds, face)) open.delete(face);
+    for (const bond of state.after.bonds) {
+      const face = bondedFace(bond);
+      const known = open.get(face);
+      if (known) {
+        known.toStep = state.number;
+        continue;
+      }
+      const made: BondResult = {
         fromStep: state.number,
         toStep: state.number,
+        face,
         carrier: bond.carrier.name,
         ...given({ piece: bond.carrier.identity }),
         carrierDiameter: bond.carrier.diameter,
@@ -111,7 +118,8 @@ function bondsOf(steps: AssessedStep[]): BondResult[] {
         flowsFrom: bond.material.flows ? (bond.material.softening?.value ?? null) : null,
         release: bond.material.release,
       };
-      bonds.push(open);
+      open.set(face, made);
+      bonds.push(made);
     }
   }
   return bonds;

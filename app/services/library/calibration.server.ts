@@ -79,8 +79,8 @@ export async function readPairFlow(
   const known = { id: found.id, name: found.name, version: found.version, programId: found.program.id, bond };
   try {
     const { steps } = walkFlow(whole, await readLimits(em));
-    const states = steps.filter(({ after, atRoom }) => after.bond && !after.transfer && atRoom?.rollRadius === null);
-    const last = steps.findLast(({ after }) => after.bond)?.number ?? 0;
+    const states = steps.filter(({ after, atRoom }) => after.bonds.length === 1 && atRoom?.rollRadius === null);
+    const last = steps.findLast(({ after }) => after.bonds.length > 0)?.number ?? 0;
     return { ...known, input: { ...whole, steps: whole.steps.slice(0, last) }, states, fault: null };
   } catch (error) {
     if (!(error instanceof EngineInputError)) throw error;

@@ -24,7 +24,7 @@ function difference(state: StepState, expectedMicrometres: number | null | undef
   if (!atRoom || typeof expectedMicrometres !== "number") return null;
   const bow = standardBow(atRoom.sagitta);
   const expected = expectedMicrometres * 1e-6;
-  const [share, least] = after.bond ? [0.08, 10e-6] : [0.05, 5e-6];
+  const [share, least] = after.bonds.length > 0 ? [0.08, 10e-6] : [0.05, 5e-6];
   return { off: Math.abs(bow - expected), allowed: Math.max(share * Math.abs(expected), least) + PRINTED };
 }
 

@@ -169,7 +169,7 @@ describe("a pair with lines that slides and locks as it lies", () => {
     const state = thinned(um(2)).at(-1)?.after;
     if (!state) throw new Error("there are three steps");
     const sliding = settle(state, T_F, options);
-    const pressed = lockedState(sliding, true).bond?.rest;
+    const pressed = lockedState(sliding, true).bonds[0]?.rest;
     const [adhesiveX, adhesiveY] = [pressed?.unequal?.adhesive.x, pressed?.unequal?.adhesive.y];
     expect(adhesiveX).toBe(pressed?.unequal?.carrier.x);
     expect(adhesiveY).toBe(pressed?.unequal?.carrier.y);

@@ -85,18 +85,32 @@ describe("Fulmar A", () => {
 
 describe("bonds of a flow", () => {
   it("go from the bond to its debond", () => {
-    expect(bondSpans(demoFlow("Petrel").flow)).toEqual([{ from: 10, to: 18 }]);
+    expect(bondSpans(demoFlow("Petrel").flow)).toEqual([{ from: 10, to: 18, face: "front" }]);
     expect(bondSpans(demoFlow("Tern").flow)).toEqual([]);
   });
 
-  it("of a transfer end in the order in which they were made", () => {
+  it("of a transfer end in the order in which they were made, unless their debonds say otherwise", () => {
     const { flow } = demoFlow("Petrel");
     const [bond, debond] = [flow.steps[9], flow.steps[17]];
     if (!bond || !debond) throw new Error("Petrel bonds and debonds");
     const second = { ...bond, bond: bond.bond && { ...bond.bond, face: "back" as const } };
     expect(bondSpans({ ...flow, steps: [bond, second, debond, debond] })).toEqual([
-      { from: 1, to: 3 },
-      { from: 2, to: 4 },
+      { from: 1, to: 3, face: "front" },
+      { from: 2, to: 4, face: "back" },
+    ]);
+    const lastFirst = { ...debond, debondFace: "back" as const };
+    expect(bondSpans({ ...flow, steps: [bond, second, lastFirst, debond] })).toEqual([
+      { from: 1, to: 4, face: "front" },
+      { from: 2, to: 3, face: "back" },
+    ]);
+  });
+
+  it("are not counted where nothing is bonded or the face is bonded already", () => {
+    const { flow } = demoFlow("Petrel");
+    const [bond, debond] = [flow.steps[9], flow.steps[17]];
+    if (!bond || !debond) throw new Error("Petrel bonds and debonds");
+    expect(bondSpans({ ...flow, steps: [{ ...bond, bond: null }, bond, bond, debond] })).toEqual([
+      { from: 2, to: 4, face: "front" },
     ]);
   });
 

@@ -36,8 +36,11 @@ describe("a piece of a carrier", () => {
   it("stays the piece that is named when another adhesive is tried, and goes with its carrier", () => {
     const input = flow([onto(), step({ planned: "carrier" })]);
     const tried = (of: ReturnType<typeof carrier>) =>
-      withBond(input, { from: 1, to: 2 }, { carrier: of, material: adhesive({ id: "other" }), thickness: 3e-5 })
-        .steps[0]?.bond?.carrier.identity;
+      withBond(
+        input,
+        { from: 1, to: 2, face: "front" },
+        { carrier: of, material: adhesive({ id: "other" }), thickness: 3e-5 },
+      ).steps[0]?.bond?.carrier.identity;
     expect(tried(carrier())).toBe("K-12");
     expect(tried(carrier({ id: "other" }))).toBeUndefined();
   });

@@ -64,12 +64,4 @@ describe("rule 14, validity of the model", () => {
     expect(outcomes(flow([bondStep({}, soft), free(peak)]), 14)).toEqual(outcome);
     expect(outcomes(flow([bondStep({}, soft), free(peak, "held")]), 14)).toEqual([]);
   });
-
-  it("cannot judge a pair that is bonded by its back side, or by both faces", () => {
-    const back = bondStep();
-    if (!back.bond) throw new Error("a bond step has a bond");
-    const onBack = { ...back, bond: { ...back.bond, face: "back" as const } };
-    expect(findings(flow([onBack]), 14)[0]).toMatchObject({ outcome: "cannot judge" });
-    expect(findings(flow([bondStep(), onBack]), 14)[0]?.reason).toContain("between two carriers");
-  });
 });

@@ -1,6 +1,7 @@
 import { describe, expect, it } from "vitest";
 import { EngineInputError } from "#app/engine/errors.ts";
 import { assessFlow } from "#app/engine/flow/assess.ts";
+import { bondedFace } from "#app/engine/flow/bond.ts";
 import { WAFER_KINDS } from "#app/engine/flow/handling-inputs.ts";
 import { walkFlow } from "#app/engine/flow/walk.ts";
 import { defaultLimits, LIMIT_DEFINITIONS, type LimitDefinition, type LimitKey } from "#app/engine/rules/limits.ts";
@@ -75,12 +76,7 @@ describe("the wafer through a transfer", () => {
       debondStep(),
     ];
     const states = walkFlow(flow(steps), limits).steps.map(({ after }) => after);
-    expect(states.map(({ bond, transfer }) => [bond !== null, transfer !== null])).toEqual([
-      [true, false],
-      [true, true],
-      [true, false],
-      [false, false],
-    ]);
+    expect(states.map(({ bonds }) => bonds.map(bondedFace))).toEqual([["front"], ["front", "back"], ["back"], []]);
     expect(states.map(({ faceUp }) => faceUp)).toEqual(["back side", "device side", "device side", "device side"]);
   });
 });

@@ -27,7 +27,7 @@ const named = (name: string, more = {}) => addition({ film: film({ id: name, nam
 
 describe("the wafer between steps", () => {
   it("starts bare, device side up, as thick as it comes in", () => {
-    expect(initialState(flow([]))).toMatchObject({ bond: null, mount: null, faceUp: "device side", ground: false });
+    expect(initialState(flow([]))).toMatchObject({ bonds: [], mount: null, faceUp: "device side", ground: false });
     expect(initialState(flow([])).silicon.value).toBeCloseTo(um(725), 12);
   });
 
@@ -72,8 +72,8 @@ describe("the wafer between steps", () => {
 
   it("bonds at the step's temperature and turns the back side up, until the debond", () => {
     const bonded = after([bondStep({ peakTemperature: celsius(180) })]);
-    expect(bonded).toMatchObject({ faceUp: "back side", bond: { bondTemperature: celsius(180) } });
-    expect(after([bondStep(), debondStep()])).toMatchObject({ bond: null, faceUp: "device side" });
+    expect(bonded).toMatchObject({ faceUp: "back side", bonds: [{ bondTemperature: celsius(180) }] });
+    expect(after([bondStep(), debondStep()])).toMatchObject({ bonds: [], faceUp: "device side" });
   });
 
   it("keeps tape and frame until something else holds the wafer", () => {
@@ -93,7 +93,7 @@ describe("the wafer between steps", () => {
 
   it("lays the damaged depth of a ground face into the silicon, not on top of it", () => {
     const ground = after([tapeStep(), grindStep(100, 3, { groundFaceForce: exact(-60) })]);
-    const layers = layersOf(ground, 298.15, { carrier: false }).entries.map(({ stated }) => stated);
+    const layers = layersOf(ground, 298.15, []).entries.map(({ stated }) => stated);
     expect(layers.reduce((sum, { thickness }) => sum + thickness, 0)).toBeCloseTo(um(100), 12);
     const force = layers.reduce(
       (sum, { stress, thickness }) => sum + (typeof stress === "number" ? stress : 0) * thickness,

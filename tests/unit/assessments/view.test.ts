@@ -68,6 +68,7 @@ describe("an assessment for its page", () => {
     expect(view("Petrel").bonds).toEqual([
       {
         steps: "step 10 to 17",
+        face: null,
         carrier: "Glass carrier 3.0 ppm",
         material: "Laser-release adhesive B",
         thickness: "50\u00A0µm",

@@ -28,7 +28,8 @@ function judged(material: AdhesiveTemperatures, peakTemperature: number, exposur
     },
     carrier: { material: "glass" },
   };
-  const state = { number: 1, step: { kind: "cure", peakTemperature, exposures }, before: { bond } };
+  const wafer = { bonds: [bond] };
+  const state = { number: 1, step: { kind: "cure", peakTemperature, exposures }, before: wafer, after: wafer };
   const findings = adhesiveRule.judge({ limits } as RuleContext, state as unknown as StepState);
   return findings.reduce<Outcome>(
     (worst, { outcome }) => (outcomeRank(outcome) > outcomeRank(worst) ? outcome : worst),

@@ -83,6 +83,36 @@ describe("rows of the step table", () => {
     ]);
   });
 
+  it("names both carriers of a transfer, and what its debond lets go", () => {
+    const second = {
+      ...bond,
+      carrier: { name: "Silicon carrier" },
+      handling: { bondFace: "back", debondFace: null },
+    } as const;
+    const held = step({ planned: "carrier" });
+    const letGo = (debondFace: "front" | "back") =>
+      step({ kind: "debond", planned: "carrier", handling: { bondFace: null, debondFace } });
+    const rows = stepRows([bond, second, held, letGo("front"), letGo("front"), letGo("back")], incoming);
+    expect(rows.map((row) => row.bond)).toEqual([
+      "Glass carrier, Adhesive, 50\u00a0µm",
+      "Silicon carrier, Adhesive, 50\u00a0µm, on the back side",
+      "Glass carrier and Silicon carrier",
+      "Silicon carrier",
+      "Silicon carrier",
+      null,
+    ]);
+    expect(rows.slice(3).map(({ changes }) => changes)).toEqual([
+      [{ word: "lets go", what: "Glass carrier", side: "device side" }],
+      [],
+      [{ word: "lets go", what: "Silicon carrier", side: "back side" }],
+    ]);
+    expect(planColumns([bond, second, letGo("front")], incoming).map(({ planned }) => planned)).toEqual([
+      "Glass carrier",
+      "both carriers",
+      "Silicon carrier",
+    ]);
+  });
+
   it("gives temperature and time without a false digit", () => {
     const [row] = stepRows([step({ peakTemperature: 503.15, holdTime: 7200 })], incoming);
     expect(row).toMatchObject({ peak: "230", minutes: "2\u00a0h" });

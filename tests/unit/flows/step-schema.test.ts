@@ -35,6 +35,16 @@ describe("a step's form", () => {
     });
   });
 
+  it("takes the face that a debond lets go, of a debond alone", () => {
+    const handling = { debondFace: "back" };
+    expect(stepSchema.parse(step({ kind: "debond", handling })).handling.debondFace).toBe("back");
+    expect(stepSchema.parse(step({ kind: "debond" })).handling.debondFace).toBeNull();
+    expect(faults({ handling })).toEqual({ "handling.debondFace": "Only a debond has it: leave it blank." });
+    expect(faults({ kind: "debond", handling: { debondFace: "rim" } })).toEqual({
+      "handling.debondFace": "Choose one of the list.",
+    });
+  });
+
   it("reads quantities with their units, in any of the usual spellings", () => {
     const read = stepSchema.parse(
       step({

@@ -44,6 +44,14 @@ describe("the wafer as a step finds it", () => {
     expect(waferBefore(input, 5)).toMatchObject({ back: ["Oxide, 0.5\u00a0µm"], on: "Silicon carrier, Adhesive" });
   });
 
+  it("is on both carriers between them, each with its face", () => {
+    const second = bondStep();
+    const steps = [bondStep(), { ...second, bond: second.bond && { ...second.bond, face: "back" as const } }];
+    expect(waferBefore(flow([...steps, step()]), 2)?.on).toBe(
+      "device side: Silicon carrier, Adhesive; back side: Silicon carrier, Adhesive",
+    );
+  });
+
   it("is not spoken of when a step before leaves no silicon", () => {
     const none = flow([step({ siliconAfter: exact(-1e-6) }), step()]);
     expect(waferBefore(none, 1)).toBeNull();

@@ -85,6 +85,7 @@ describe("the page for hands", () => {
     expect(view("Petrel").bonds).toEqual([
       {
         steps: "steps 10 to 17",
+        face: null,
         carrier: "Glass carrier 3.0 ppm",
         material: "Laser-release adhesive B",
         debond: "step 18, laser through the glass",
