@@ -155,6 +155,8 @@ describe("rule 8, debond on tape or ring", () => {
 
   it("leaves the first debond of a transfer to the carrier that stays", () => {
     const steps = [bondStep(), onBack(bondStep()), debondStep({ planned: "carrier" })];
-    expect(findings(flow(steps), 8)).toMatchObject([{ outcome: "clear", reason: expect.stringContaining("It stays on") }]);
+    expect(findings(flow(steps), 8)).toMatchObject([
+      { outcome: "clear", reason: expect.stringContaining("It stays on") },
+    ]);
   });
 });
