@@ -53,14 +53,14 @@ const barring = (findings: typeof assessed.findings) =>
 
 describe("Petrel without its back-side metal, carried on as a transfer", () => {
   it("runs with cautions, and says so", () => {
-    expect(barring(assessed.findings)).toEqual([157, -71, -105, -105, -105, -119]);
+    expect(barring(assessed.findings)).toEqual([]);
     expect(assessed.verdict.outcome).toBe("caution");
     expect(answerSentences(transfer(false), assessed)[0]).toMatch(/^Runs with cautions: /);
   });
 
   it("bends as it did when this was written", () => {
     const bows = assessed.steps.slice(13, 19).map(({ state: { atRoom } }) => standardBow(atRoom?.sagitta ?? NaN) * 1e6);
-    expect(bows.map((bow) => Math.round(bow))).toEqual([]);
+    expect(bows.map((bow) => Math.round(bow))).toEqual([157, -71, -105, -105, -105, -119]);
   });
 
   it("lies with the back side up, then the device side, and on a frame by its device side with the back side up again", () => {
