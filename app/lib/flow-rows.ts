@@ -1,7 +1,9 @@
 import type { StepKind } from "#app/engine/flow/model.ts";
 import type { Measured } from "#app/engine/measured.ts";
+import type { FilmLines } from "#app/engine/patterned/pattern.ts";
 import { formatQuantity } from "#app/engine/units/format.ts";
 import type { Exposure, Holding, Side } from "#app/engine/vocabulary.ts";
+import { filmCutWords } from "./film-cut.ts";
 import { filmThicknessText, siliconText } from "./flow-thickness.ts";
 import { formatBare } from "./format-measured.ts";
 
@@ -29,6 +31,7 @@ export interface ShownStep {
     film: { name: string };
     thickness: Measured | null;
     coverage: number;
+    lines?: FilmLines | null;
   }[];
 }
 
@@ -66,11 +69,11 @@ const SIDES = { front: "device side", back: "back side" } as const;
 
 const length = (value: number, unit: string) => formatQuantity(value, "length", { unit });
 
-function filmChange({ change, side, film, thickness, coverage }: ShownStep["films"][number]): StepChange {
+function filmChange({ change, side, film, thickness, coverage, lines }: ShownStep["films"][number]): StepChange {
   const parts = [
     film.name,
     thickness && filmThicknessText(thickness.value),
-    change === "adds" && coverage < 1 ? formatQuantity(coverage, "fraction", { unit: "%" }) : null,
+    change === "adds" ? filmCutWords({ coverage, lines }) : null,
   ];
   return { word: change, what: parts.filter(Boolean).join(", "), side: SIDES[side] };
 }

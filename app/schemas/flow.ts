@@ -2,9 +2,11 @@ import { z } from "zod";
 import { WAFER_KINDS } from "#app/engine/flow/handling-inputs.ts";
 import { STEP_KINDS } from "#app/engine/flow/model.ts";
 import type { Measured } from "#app/engine/measured.ts";
-import { EXPOSURES, HOLDINGS } from "#app/engine/vocabulary.ts";
+import type { FilmLines } from "#app/engine/patterned/pattern.ts";
+import { EXPOSURES, HOLDINGS, type Side } from "#app/engine/vocabulary.ts";
 import { exposureKey } from "#app/lib/exposure-key.ts";
 import { inputsOf, KIND_FIELDS } from "#app/lib/flow-step-kinds.ts";
+import { checkFilmCut, filmCutFields, linesOf } from "./film-cut.ts";
 import { measured, optionalMeasured, optionalQuantity, quantity } from "./quantity.ts";
 import { RULES } from "./ranges.ts";
 import { recordFields } from "./record-fields.ts";
@@ -76,14 +78,34 @@ export type NewFlowValues = z.output<typeof newFlowSchema>;
 /** Name and note of a flow template. */
 export const templateNameSchema = z.object(recordFields);
 
-const filmChange = z.object({
-  change: z.enum(["adds", "removes"], "Choose whether the step adds or removes it."),
-  side: z.enum(["front", "back"], "Choose the side."),
-  film: z.uuid("Choose a film."),
-  thickness: optionalMeasured({ ...RULES.filmThickness, source: "assumed" }),
-  stress: optionalMeasured({ ...RULES.stress, source: "assumed" }),
-  coverage: optionalQuantity(RULES.coverage),
-});
+/** A film that a step adds or takes off. */
+interface FilmChange {
+  change: "adds" | "removes";
+  side: Side;
+  film: string;
+  thickness: Measured | null;
+  stress: Measured | null;
+  coverage: number | null;
+  /** absent in plans of before lines could be typed: none */
+  lines?: FilmLines | null;
+}
+
+const filmChange = z
+  .object({
+    change: z.enum(["adds", "removes"], "Choose whether the step adds or removes it."),
+    side: z.enum(["front", "back"], "Choose the side."),
+    film: z.uuid("Choose a film."),
+    thickness: optionalMeasured({ ...RULES.filmThickness, source: "assumed" }),
+    stress: optionalMeasured({ ...RULES.stress, source: "assumed" }),
+    ...filmCutFields,
+  })
+  .superRefine((typed, context) =>
+    checkFilmCut(typed, (path, message) => context.addIssue({ code: "custom", path, message })),
+  )
+  .transform(({ cut, lineWidth, lineDirection, ...film }): FilmChange => ({
+    ...film,
+    lines: linesOf({ cut, lineWidth, lineDirection }),
+  }));
 
 /** Fields of a step, each by itself. */
 const stepFields = z.object({
@@ -167,7 +189,10 @@ function checkHandling(handling: StepHandlingValues, step: Partly<StepValues>, f
   }
 }
 
-function checkFilm({ change, thickness, stress, coverage }: Partly<StepValues["films"][number]>, fail: Fail): void {
+function checkFilm(
+  { change, thickness, stress, coverage, lines }: Partly<StepValues["films"][number]>,
+  fail: Fail,
+): void {
   if (change === "adds") {
     if (thickness === null) fail(["thickness", "value"], "Type the film thickness. Blank is missing, not zero.");
     if (reachesZero(thickness)) fail(["thickness", "tolerance"], SPREAD);
@@ -177,6 +202,7 @@ function checkFilm({ change, thickness, stress, coverage }: Partly<StepValues["f
   if (thickness) fail(["thickness", "value"], whole);
   if (stress) fail(["stress", "value"], whole);
   if (typeof coverage === "number") fail(["coverage"], whole);
+  if (lines) fail(["lineWidth"], whole);
 }
 
 /** Looks at the fields together. A field that has been spoken of already is not spoken of again. */

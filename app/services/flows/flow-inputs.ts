@@ -11,6 +11,7 @@ import type {
   IncomingShape,
   StepInput,
 } from "#app/engine/flow/model.ts";
+import { linesPattern } from "#app/engine/patterned/pattern.ts";
 import { incomingFromBows } from "#app/engine/flow/silicon.ts";
 import { bondHandlingOf, stepHandlingOf } from "#app/lib/flow-handling.ts";
 import {
@@ -132,9 +133,19 @@ function stepInputOf(step: StepDetail): StepInput {
     exposures: step.exposures,
     planned: step.planned,
     siliconAfter: step.siliconAfter,
-    adds: step.films.flatMap(({ change, side, film, thickness, stress, stressRecord, coverage }) =>
+    adds: step.films.flatMap(({ change, side, film, thickness, stress, stressRecord, coverage, lines }) =>
       change === "adds" && thickness
-        ? [{ side, film, thickness, stress, coverage, ...(stressRecord ? { stressRecord } : {}) }]
+        ? [
+            {
+              side,
+              film,
+              thickness,
+              stress,
+              coverage,
+              ...(lines ? { pattern: linesPattern(lines, coverage) } : {}),
+              ...(stressRecord ? { stressRecord } : {}),
+            },
+          ]
         : [],
     ),
     removes: step.films.flatMap(({ change, side, film }) =>

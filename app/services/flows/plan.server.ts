@@ -93,23 +93,24 @@ function stepPlan(step: FlowStep, films: FlowStepFilm[]): StepPlan {
     bondThickness: step.bondThickness ?? null,
     groundFaceForce: step.groundFaceForce ?? null,
     handling: step.handling,
-    films: films.map(({ change, side, film, thickness, stress, coverage }) => ({
+    films: films.map(({ change, side, film, thickness, stress, coverage, lines }) => ({
       change,
       side,
       film: film.id,
       thickness: thickness ?? null,
       stress: stress ?? null,
       coverage: change === "adds" ? coverage : null,
+      lines: (change === "adds" && lines) || null,
     })),
   };
 }
 
 /** Of a film only what an addition has; a coverage left blank is all of the area. */
 const settled = (films: StepValues["films"]): StepValues["films"] =>
-  films.map(({ change, side, film, thickness, stress, coverage }) =>
+  films.map(({ change, side, film, thickness, stress, coverage, lines }) =>
     change === "adds"
-      ? { change, side, film, thickness, stress, coverage: coverage ?? 1 }
-      : { change, side, film, thickness: null, stress: null, coverage: null },
+      ? { change, side, film, thickness, stress, coverage: coverage ?? 1, lines: lines ?? null }
+      : { change, side, film, thickness: null, stress: null, coverage: null, lines: null },
   );
 
 /** Writes what differs between the plan that is stored and the one that is to be. */

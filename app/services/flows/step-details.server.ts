@@ -46,7 +46,7 @@ function stepDetail(step: StepPlan, { tools, carriers, materials, films }: Libra
     equipment: found(equipment, tools, equipmentInput),
     carrier: found(carrier, carriers, carrierInput),
     bondingMaterial: found(bondingMaterial, materials, bondingMaterialInput),
-    films: changes.flatMap(({ film: id, stress, thickness, coverage, ...change }): StepFilmDetail[] => {
+    films: changes.flatMap(({ film: id, stress, thickness, coverage, lines, ...change }): StepFilmDetail[] => {
       const film = films.get(id);
       if (!film) return [];
       return [
@@ -58,6 +58,7 @@ function stepDetail(step: StepPlan, { tools, carriers, materials, films }: Libra
           stress: stress ?? film.stress,
           stressRecord: stress ? null : stressRecordOf(film),
           coverage: coverage ?? 1,
+          lines: lines ?? null,
         },
       ];
     }),

@@ -53,6 +53,7 @@ const stepDetail = (step: StepInput, index: number, own: readonly string[]): Ste
     stress,
     stressRecord: null,
     coverage,
+    lines: null,
   })),
 });
 
