@@ -51,6 +51,7 @@ const OTHER: Record<string, InputProperty> = {
   x: { label: "Incoming curvature along the notch", dimension: "curvature", unit: "1/m", sign: true },
   y: { label: "Incoming curvature across the notch", dimension: "curvature", unit: "1/m", sign: true },
   filmShare: { label: "Film part of the incoming shape", dimension: "fraction", unit: "%" },
+  expansionCurve: { label: "Expansion over temperature" },
   meanExpansionOver: { label: "Expansion is a mean over" },
   from: { label: "Expansion is a mean from", dimension: "temperature", unit: "°C" },
   to: { label: "Expansion is a mean to", dimension: "temperature", unit: "°C" },

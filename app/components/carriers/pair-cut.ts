@@ -46,9 +46,11 @@ export function pairCut(carrier: LibraryRecords["carrier"], pair: TriedPair): Cu
       notes: [
         carrier.expansion
           ? formatMeasured(carrier.expansion, "expansion", { unit: "ppm/K" })
-          : "expands as the wafer does",
+          : carrier.expansionCurve
+            ? "expands by its curve"
+            : "expands as the wafer does",
       ],
-      assumed: carrier.expansion?.source === "assumed",
+      assumed: (carrier.expansion ?? carrier.expansionCurve)?.source === "assumed",
     },
   ];
   const exaggeration = chooseExaggeration([pair.bow], wafer.diameter);

@@ -6,6 +6,7 @@ import { FlowRevisionsAndTemplates } from "./2026-12-03-flow-revisions-and-templ
 import { LibraryForRules } from "./2026-12-04-library-for-rules.ts";
 import { AssessmentLot } from "./2026-12-05-assessment-lot.ts";
 import { PhysicsInputs } from "./2026-12-05-physics-inputs.ts";
+import { CarrierExpansionCurve } from "./2026-12-06-carrier-expansion-curve.ts";
 import { FilmLines } from "./2026-12-06-film-lines.ts";
 
 /** Every migration in the order in which it runs. */
@@ -19,4 +20,5 @@ export const migrations = [
   { name: "2026-12-05-assessment-lot", class: AssessmentLot },
   { name: "2026-12-05-physics-inputs", class: PhysicsInputs },
   { name: "2026-12-06-film-lines", class: FilmLines },
+  { name: "2026-12-06-carrier-expansion-curve", class: CarrierExpansionCurve },
 ];

@@ -64,6 +64,7 @@ export function addDemoLibrary(em: EntityManager): void {
       expansionRange: carrier.expansion === null ? "silicon's own curve" : "25 to 150 °C mean",
       meanExpansionFrom: carrier.expansion === null ? null : celsius(25),
       meanExpansionTo: carrier.expansion === null ? null : celsius(150),
+      expansionCurve: null,
       density: property(carrier.density, 10),
       thicknessVariation: property(carrier.thicknessVariation * 1e-6, null),
       temperatureLimit: property(celsius(carrier.limit), null),

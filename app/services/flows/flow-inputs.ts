@@ -13,6 +13,7 @@ import type {
 } from "#app/engine/flow/model.ts";
 import { linesPattern } from "#app/engine/patterned/pattern.ts";
 import { incomingFromBows } from "#app/engine/flow/silicon.ts";
+import { expansionCurveOf, meanOfCurve } from "#app/lib/expansion-rows.ts";
 import { bondHandlingOf, stepHandlingOf } from "#app/lib/flow-handling.ts";
 import {
   bondingMaterialHandlingOf,
@@ -20,6 +21,7 @@ import {
   equipmentHandlingOf,
   filmHandlingOf,
 } from "#app/lib/library-handling.ts";
+import type { LibraryRecords } from "#app/schemas/library-records.ts";
 import type { FlowDetail, StepDetail } from "#app/schemas/flow-view.ts";
 
 /**
@@ -42,8 +44,8 @@ export function filmInput({ id, name, kind, ...film }: Film): FilmInput {
   };
 }
 
-export function carrierInput({ id, name, material, ...carrier }: Carrier): CarrierInput {
-  const { meanExpansionFrom: from, meanExpansionTo: to } = carrier;
+export function carrierInput({ id, name, material, ...carrier }: Carrier | LibraryRecords["carrier"]): CarrierInput {
+  const { meanExpansionFrom: from, meanExpansionTo: to, expansionCurve: curve } = carrier;
   return {
     id,
     name,
@@ -52,7 +54,9 @@ export function carrierInput({ id, name, material, ...carrier }: Carrier): Carri
     diameter: carrier.diameter,
     youngsModulus: carrier.youngsModulus,
     poissonsRatio: carrier.poissonsRatio,
-    expansion: carrier.expansion ?? null,
+    // The curve's own mean stands for what it is uncertain by and where it comes from.
+    expansion: carrier.expansion ?? (curve ? meanOfCurve(curve) : null),
+    ...(curve && { expansionCurve: expansionCurveOf(curve) }),
     meanExpansionOver: typeof from === "number" && typeof to === "number" ? { from, to } : null,
     temperatureLimit: carrier.temperatureLimit,
     ...carrierHandlingOf(carrier),
