@@ -11,4 +11,5 @@ export interface StepChoices {
   tools: ExplainedChoice[];
   carriers: ExplainedChoice[];
   materials: ExplainedChoice[];
+  tapes: ExplainedChoice[];
 }

@@ -1,5 +1,6 @@
 import { BONDING_MATERIAL_PROPERTIES } from "#app/components/carriers/bonding-material-properties.ts";
 import { CARRIER_PROPERTIES } from "#app/components/carriers/carrier-properties.ts";
+import { TAPE_PROPERTIES } from "#app/components/carriers/tape-properties.ts";
 import { TOOL_PROPERTIES } from "#app/components/carriers/tool-properties.ts";
 import { FILM_PROPERTIES } from "#app/components/films/film-properties.ts";
 import type { Measured } from "#app/engine/measured.ts";
@@ -61,6 +62,7 @@ const TABLES: Partial<Record<InputRecord, Record<string, InputProperty>>> = {
   film: FILM_PROPERTIES,
   carrier: CARRIER_PROPERTIES,
   bondingMaterial: BONDING_MATERIAL_PROPERTIES,
+  tape: TAPE_PROPERTIES,
   equipment: TOOL_PROPERTIES,
 };
 

@@ -51,6 +51,7 @@ function stepWords(step: StepValues, choices: StepChoices): [label: string, word
     ["Carrier", choiceWords(choices.carriers, step.carrier)],
     ["Bonding material", choiceWords(choices.materials, step.bondingMaterial)],
     ["Thickness of the bond", measuredWords(step.bondThickness, "length", "µm")],
+    ["Tape of the library", choiceWords(choices.tapes, step.tape)],
     ["Films", filmWords(step, choices)],
     ...stepHandlingWords(step.handling).map(([label, words]): [string, string] => [label, words ?? NOTHING]),
   ];

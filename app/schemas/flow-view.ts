@@ -1,4 +1,4 @@
-import type { StressRecord, WaferKind } from "#app/engine/flow/handling-inputs.ts";
+import type { StressRecord, TapeInput, WaferKind } from "#app/engine/flow/handling-inputs.ts";
 import type {
   BondingMaterialInput,
   CarrierInput,
@@ -45,6 +45,8 @@ export interface StepDetail {
   bondingMaterial: BondingMaterialInput | null;
   bondThickness: Measured | null;
   groundFaceForce: Measured | null;
+  /** the library's; what `handling` says of a tape counts before it */
+  tape: (TapeInput & { id: string }) | null;
   handling: StepHandlingValues;
   films: StepFilmDetail[];
 }

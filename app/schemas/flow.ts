@@ -99,9 +99,10 @@ const filmChange = z
     stress: optionalMeasured({ ...RULES.stress, source: "assumed" }),
     ...filmCutFields,
   })
-  .superRefine((typed, context) =>
-    checkFilmCut(typed, (path, message) => context.addIssue({ code: "custom", path, message })),
-  )
+  .superRefine((typed, context) => {
+    if (typed.change === "adds")
+      checkFilmCut(typed, (path, message) => context.addIssue({ code: "custom", path, message }));
+  })
   .transform(({ cut, lineWidth, lineDirection, ...film }): FilmChange => ({
     ...film,
     lines: linesOf({ cut, lineWidth, lineDirection }),
@@ -126,6 +127,7 @@ const stepFields = z.object({
   bondingMaterial: identifier,
   bondThickness: optionalMeasured({ ...RULES.bondThickness, source: "assumed" }),
   groundFaceForce: optionalMeasured({ ...RULES.faceForce, source: "assumed" }),
+  tape: identifier,
   films: z
     .array(filmChange)
     .max(20, "A step changes at most 20 films.")
@@ -161,6 +163,7 @@ function checkKind(step: Partly<StepValues>, fail: Fail): void {
     if (step.trimWidth) fail(["trimWidth", "value"], only);
     if (step.trimDepth) fail(["trimDepth", "value"], only);
   }
+  if (!has.tape && step.tape) fail(["tape"], "Only a step that puts it on tape has it: leave it blank.");
   if (!has.groundFace && step.groundFaceForce)
     fail(["groundFaceForce", "value"], "Only a grind, stress relief, polish or via reveal changes it: leave it blank.");
   if (step.kind === "grind" && !step.siliconAfter)

@@ -89,6 +89,11 @@ export const RULES = {
     dimension: "length",
     range: { least: 0, most: 2e-3, words: "0 to 2 mm" },
   },
+  tapeThickness: {
+    label: "thickness of the tape",
+    dimension: "length",
+    range: { least: 1e-6, most: 3e-3, words: "1 µm to 3 mm" },
+  },
   peelForce: {
     label: "peel force",
     dimension: "forcePerLength",

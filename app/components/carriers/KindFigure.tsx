@@ -41,6 +41,7 @@ export function KindFigure(data: KindPageData) {
         </>
       );
     }
+    case "tapes":
     case "silicon":
     case "tools":
       return null;

@@ -17,7 +17,7 @@ export function StepReading({ step }: { step: StepDetail }) {
     ["Carrier", step.carrier?.name ?? null],
     ["Bonding material", step.bondingMaterial?.name ?? null],
     ...step.films.map(filmWords),
-    ...stepHandlingWords(step.handling),
+    ...stepHandlingWords(step.handling, step.tape),
   ];
   const properties = measuredOf(step);
   return (

@@ -31,6 +31,7 @@ export type StepFormValues = {
   bondingMaterial: string;
   bondThickness: MeasuredText;
   groundFaceForce: MeasuredText;
+  tape: string;
   films: FilmChangeValues[];
   handling: StepHandlingText;
 };
@@ -53,6 +54,7 @@ export function stepFormValues(step: StepDetail): StepFormValues {
     bondingMaterial: step.bondingMaterial?.id ?? "",
     bondThickness: length(step.bondThickness),
     groundFaceForce: measuredText(step.groundFaceForce, "forcePerLength", { unit: "N/m" }),
+    tape: step.tape?.id ?? "",
     handling: stepHandlingText(step.handling),
     films: step.films.map((film) => ({
       change: film.change,

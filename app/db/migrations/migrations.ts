@@ -8,6 +8,7 @@ import { AssessmentLot } from "./2026-12-05-assessment-lot.ts";
 import { PhysicsInputs } from "./2026-12-05-physics-inputs.ts";
 import { CarrierExpansionCurve } from "./2026-12-06-carrier-expansion-curve.ts";
 import { FilmLines } from "./2026-12-06-film-lines.ts";
+import { Tapes } from "./2026-12-06-tapes.ts";
 
 /** Every migration in the order in which it runs. */
 export const migrations = [
@@ -21,4 +22,5 @@ export const migrations = [
   { name: "2026-12-05-physics-inputs", class: PhysicsInputs },
   { name: "2026-12-06-film-lines", class: FilmLines },
   { name: "2026-12-06-carrier-expansion-curve", class: CarrierExpansionCurve },
+  { name: "2026-12-06-tapes", class: Tapes },
 ];

@@ -216,13 +216,8 @@ export const fulmarSteps = (bond: DemoBond): DemoStep[] => [
   {
     kind: "mount on frame",
     title: "Mount back side on film frame",
-    handling: {
-      timeSincePrevious: 4 * 3600,
-      tapeName: "Dicing tape A",
-      tapeTemperatureLimit: measured(celsius(80), null, "supplier"),
-      tapeReleasesInLight: true,
-      tapeSolvent: "unknown",
-    },
+    tape: "Dicing tape A",
+    handling: { timeSincePrevious: 4 * 3600, tapeSolvent: "unknown" },
     peak: 25,
     equipment: "Frame mounter",
     planned: "carrier",

@@ -136,13 +136,7 @@ export const TERN_STEPS: DemoStep[] = [
   {
     kind: "laminate tape",
     title: "Laminate bump-embedding grinding tape, 200 µm embedding layer",
-    handling: {
-      tapeName: "Bump-embedding grinding tape A",
-      tapeTemperatureLimit: measured(celsius(80), null, "supplier"),
-      tapeEmbeddingDepth: measured(200e-6, 10e-6, "supplier"),
-      tapeThicknessVariation: measured(3e-6, null, "supplier"),
-      tapeReleasesInLight: true,
-    },
+    tape: "Bump-embedding grinding tape A",
     peak: 60,
     minutes: 1,
     equipment: "Tape laminator",
@@ -173,13 +167,8 @@ export const TERN_STEPS: DemoStep[] = [
   {
     kind: "mount on frame",
     title: "Mount on film frame in line, peel grinding tape",
-    handling: {
-      inLine: true,
-      timeSincePrevious: 600,
-      tapeName: "Dicing tape A",
-      tapeTemperatureLimit: measured(celsius(80), null, "supplier"),
-      tapeReleasesInLight: true,
-    },
+    tape: "Dicing tape A",
+    handling: { inLine: true, timeSincePrevious: 600 },
     peak: 60,
     minutes: 1,
     equipment: "Frame mounter",

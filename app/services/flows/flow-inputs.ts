@@ -2,6 +2,8 @@ import type { BondingMaterial } from "#app/db/entities/bonding-material.ts";
 import type { Carrier } from "#app/db/entities/carrier.ts";
 import type { Equipment } from "#app/db/entities/equipment.ts";
 import type { Film } from "#app/db/entities/film.ts";
+import type { Tape } from "#app/db/entities/tape.ts";
+import type { TapeInput } from "#app/engine/flow/handling-inputs.ts";
 import type {
   BondingMaterialInput,
   CarrierInput,
@@ -20,6 +22,7 @@ import {
   carrierHandlingOf,
   equipmentHandlingOf,
   filmHandlingOf,
+  tapeHandlingOf,
 } from "#app/lib/library-handling.ts";
 import type { LibraryRecords } from "#app/schemas/library-records.ts";
 import type { FlowDetail, StepDetail } from "#app/schemas/flow-view.ts";
@@ -96,6 +99,18 @@ export function equipmentInput({ id, name, ...tool }: Equipment): EquipmentInput
   };
 }
 
+export function tapeInput({ id, name, handling, ...tape }: Tape): TapeInput & { id: string } {
+  return {
+    id,
+    name,
+    temperatureLimit: tape.temperatureLimit ?? null,
+    embeddingDepth: tape.embeddingDepth ?? null,
+    thicknessVariation: tape.thicknessVariation ?? null,
+    longestTime: tape.longestTime ?? null,
+    ...tapeHandlingOf(handling),
+  };
+}
+
 /** The flow as the engine takes it, complete in itself. */
 export function flowInputOf(
   flow: Pick<FlowDetail, Exclude<keyof FlowDetail, "id" | "note" | "program" | "stamp" | "mayEdit" | "mayAssess">>,
@@ -161,6 +176,6 @@ function stepInputOf(step: StepDetail): StepInput {
         ? { carrier, material: bondingMaterial, thickness: bondThickness, ...bondHandlingOf(step.handling) }
         : null,
     groundFaceForce: step.groundFaceForce,
-    ...stepHandlingOf(step.handling),
+    ...stepHandlingOf(step.handling, step.tape),
   };
 }

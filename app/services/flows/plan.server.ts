@@ -9,6 +9,7 @@ import { FlowStepFilm } from "#app/db/entities/flow-step-film.ts";
 import { FlowStep } from "#app/db/entities/flow-step.ts";
 import type { Flow } from "#app/db/entities/flow.ts";
 import { Silicon } from "#app/db/entities/silicon.ts";
+import { Tape } from "#app/db/entities/tape.ts";
 import { completeStep } from "#app/lib/blank-step.ts";
 import type { FlowPlan, StepPlan } from "#app/schemas/flow-plan.ts";
 import type { StepValues } from "#app/schemas/flow.ts";
@@ -92,6 +93,7 @@ function stepPlan(step: FlowStep, films: FlowStepFilm[]): StepPlan {
     bondingMaterial: step.bondingMaterial?.id ?? null,
     bondThickness: step.bondThickness ?? null,
     groundFaceForce: step.groundFaceForce ?? null,
+    tape: step.tape?.id ?? null,
     handling: step.handling,
     films: films.map(({ change, side, film, thickness, stress, coverage, lines }) => ({
       change,
@@ -153,7 +155,7 @@ async function required<Entity>(found: Promise<Entity | null>, what: string): Pr
 }
 
 async function stepColumns(em: EntityManager, values: StepValues) {
-  const { films: _films, equipment, carrier, bondingMaterial, ...columns } = values;
+  const { films: _films, equipment, carrier, bondingMaterial, tape, ...columns } = values;
   return {
     ...columns,
     equipment: equipment ? await required(em.findOne(Equipment, { id: equipment }), "tool") : null,
@@ -161,6 +163,7 @@ async function stepColumns(em: EntityManager, values: StepValues) {
     bondingMaterial: bondingMaterial
       ? await required(em.findOne(BondingMaterial, { id: bondingMaterial }), "bonding material")
       : null,
+    tape: tape ? await required(em.findOne(Tape, { id: tape }), "tape") : null,
   };
 }
 

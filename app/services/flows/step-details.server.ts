@@ -3,15 +3,17 @@ import { BondingMaterial } from "#app/db/entities/bonding-material.ts";
 import { Carrier } from "#app/db/entities/carrier.ts";
 import { Equipment } from "#app/db/entities/equipment.ts";
 import { Film } from "#app/db/entities/film.ts";
+import { Tape } from "#app/db/entities/tape.ts";
 import { stressRecordOf } from "#app/lib/library-handling.ts";
 import type { StepPlan } from "#app/schemas/flow-plan.ts";
 import type { StepDetail, StepFilmDetail } from "#app/schemas/flow-view.ts";
-import { bondingMaterialInput, carrierInput, equipmentInput, filmInput } from "./flow-inputs.ts";
+import { bondingMaterialInput, carrierInput, equipmentInput, filmInput, tapeInput } from "./flow-inputs.ts";
 
 interface Library {
   tools: Map<string, Equipment>;
   carriers: Map<string, Carrier>;
   materials: Map<string, BondingMaterial>;
+  tapes: Map<string, Tape>;
   films: Map<string, Film>;
 }
 
@@ -25,6 +27,7 @@ async function usedLibrary(em: EntityManager, steps: StepPlan[]): Promise<Librar
     tools: byId(await em.find(Equipment, named(steps.map(({ equipment }) => equipment)))),
     carriers: byId(await em.find(Carrier, named(steps.map(({ carrier }) => carrier)))),
     materials: byId(await em.find(BondingMaterial, named(steps.map(({ bondingMaterial }) => bondingMaterial)))),
+    tapes: byId(await em.find(Tape, named(steps.map(({ tape }) => tape)))),
     films: byId(await em.find(Film, named(steps.flatMap(({ films }) => films.map(({ film }) => film))))),
   };
 }
@@ -35,8 +38,8 @@ export async function stepDetails(em: EntityManager, steps: StepPlan[]): Promise
   return steps.map((step) => stepDetail(step, library));
 }
 
-function stepDetail(step: StepPlan, { tools, carriers, materials, films }: Library): StepDetail {
-  const { equipment, carrier, bondingMaterial, films: changes, ...typed } = step;
+function stepDetail(step: StepPlan, { tools, carriers, materials, tapes, films }: Library): StepDetail {
+  const { equipment, carrier, bondingMaterial, tape, films: changes, ...typed } = step;
   const found = <Entity, Input>(id: string | null, map: Map<string, Entity>, toInput: (entity: Entity) => Input) => {
     const entity = id === null ? undefined : map.get(id);
     return entity ? toInput(entity) : null;
@@ -46,6 +49,7 @@ function stepDetail(step: StepPlan, { tools, carriers, materials, films }: Libra
     equipment: found(equipment, tools, equipmentInput),
     carrier: found(carrier, carriers, carrierInput),
     bondingMaterial: found(bondingMaterial, materials, bondingMaterialInput),
+    tape: found(tape, tapes, tapeInput),
     films: changes.flatMap(({ film: id, stress, thickness, coverage, lines, ...change }): StepFilmDetail[] => {
       const film = films.get(id);
       if (!film) return [];
