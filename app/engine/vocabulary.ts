@@ -55,6 +55,12 @@ export function flatWithinUncertainty(warp: number, standardUncertainty: number 
   return standardUncertainty !== null && warp < 2 * standardUncertainty;
 }
 
+/** The word for how it lies, or that its uncertainty does not tell. */
+export function knownShapeWord(word: ShapeWord, warp: number, standardUncertainty: number | null): string {
+  const bent = word === "edges up" || word === "edges down" || word === "saddle";
+  return bent && flatWithinUncertainty(warp, standardUncertainty) ? FLAT_WITHIN_UNCERTAINTY : word;
+}
+
 /** Which face is up on the tool: the pair lies carrier down from bond to debond, so its back side is up. */
 export type FaceUp = "device side" | "back side";
 

@@ -2,6 +2,7 @@ import { formatQuantity } from "#app/engine/units/format.ts";
 import {
   FLAT_WITHIN_UNCERTAINTY,
   flatWithinUncertainty,
+  knownShapeWord,
   type Holding,
   type ShapeWord,
 } from "#app/engine/vocabulary.ts";
@@ -27,8 +28,7 @@ export function shapeText(shape: ShapeResult, word?: ShapeWord): string {
 
 /** The one word for how it lies, or that its uncertainty does not tell. */
 export function liesWord({ lies, atRoom }: Pick<StepResult, "lies" | "atRoom">): string {
-  const bent = lies !== "flat" && atRoom !== null && !isRolled(atRoom);
-  return bent && flatWithinUncertainty(atRoom.warp, atRoom.standardUncertainty) ? FLAT_WITHIN_UNCERTAINTY : lies;
+  return atRoom ? knownShapeWord(lies, atRoom.warp, atRoom.standardUncertainty) : lies;
 }
 
 /** The standard bow beside it: 'standard bow −231 ± 52 µm', with that of the other axis where they differ; null for a wafer that has rolled up, which has none. */

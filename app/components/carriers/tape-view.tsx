@@ -17,17 +17,13 @@ type Tape = LibraryRecords["tape"];
 const NONE = "–";
 
 const inLight = ({ handling: { releasesInLight } }: Tape) =>
-  releasesInLight === null
-    ? "not given"
-    : releasesInLight
-      ? "ultraviolet light lets it go"
-      : "light does not let it go";
+  releasesInLight === null ? "not given" : releasesInLight ? "by ultraviolet light" : "not by light";
 
 /** What it is known to stand: 'vacuum, plasma'. */
 const standing = ({ handling }: Tape) =>
   RESISTANCES.filter(({ name }) => handling[name]?.word === "resists")
     .map(({ label }) => label.toLowerCase())
-    .join(", ") || NONE;
+    .join(", ") || "nothing given";
 
 export const TAPE_LIST: ListView<Tape> = {
   ...KINDS.tapes,
@@ -85,7 +81,7 @@ export const TAPE_LIST: ListView<Tape> = {
       cell: (tape) => (
         <>
           {standing(tape)}
-          {tape.handling.releasesInLight && <SecondLine>{inLight(tape)}</SecondLine>}
+          {tape.handling.releasesInLight && <SecondLine>lets go {inLight(tape)}</SecondLine>}
         </>
       ),
     },
@@ -109,7 +105,7 @@ export function tapeView(tape: Tape): RecordView {
     properties: propertyRows(tape, TAPE_PROPERTIES),
     facts: [
       { label: "For", value: tape.kind },
-      { label: "Ultraviolet light", value: inLight(tape) },
+      { label: "Lets go", value: inLight(tape) },
       ...RESISTANCES.map(({ name, label }) => ({ label, value: resistanceText(handling[name]) })),
       ...(handling.attackedBy.length > 0 ? [{ label: "Attacked by", value: handling.attackedBy.join(", ") }] : []),
       { label: "Source of these", value: <SourceMark kind={handlingSource} /> },

@@ -29,9 +29,8 @@ export function expansionPlot(points: readonly PlotPoint[]): Plot {
       to: top,
       ticks: multiples(niceStep((top - bottom) / 4), bottom, top).map((value) => ({
         value,
-        text: signedTick(Number((value / PPM).toPrecision(6))),
+        text: `${signedTick(Number((value / PPM).toPrecision(6)))}\u00A0ppm/K`,
       })),
-      title: "ppm/K",
       format: (value) => formatQuantity(value, "expansion", { unit: "ppm/K", significant: 3 }),
     },
     series: [

@@ -44,6 +44,7 @@ export const fulmarSteps = (bond: DemoBond): DemoStep[] => [
   {
     kind: "pattern",
     title: "Coat, expose, develop thick resist",
+    handling: { solvent: "ester or glycol ether" },
     peak: 110,
     minutes: 5,
     equipment: "Coat and develop track",
@@ -62,6 +63,7 @@ export const fulmarSteps = (bond: DemoBond): DemoStep[] => [
   {
     kind: "clean",
     title: "Strip resist, etch seed",
+    handling: { solvent: "polar aprotic" },
     peak: 60,
     minutes: 10,
     equipment: "Single-wafer wet or plating",
@@ -179,6 +181,7 @@ export const fulmarSteps = (bond: DemoBond): DemoStep[] => [
   {
     kind: "pattern",
     title: "Coat, expose, develop back-side resist",
+    handling: { solvent: "ester or glycol ether" },
     peak: 110,
     minutes: 3,
     equipment: "Mask aligner or stepper",
@@ -188,6 +191,7 @@ export const fulmarSteps = (bond: DemoBond): DemoStep[] => [
   {
     kind: "plate",
     title: "Plate back-side pads 4 µm, 8 %, strip, etch seed",
+    handling: { solvent: "polar aprotic" },
     peak: 40,
     minutes: 15,
     equipment: "Single-wafer wet or plating",

@@ -50,6 +50,7 @@ export const petrelSteps = (bond: DemoBond): DemoStep[] => [
   {
     kind: "pattern",
     title: "Coat, expose, develop resist",
+    handling: { solvent: "ester or glycol ether" },
     peak: 110,
     minutes: 3,
     equipment: "Coat and develop track",
@@ -68,7 +69,7 @@ export const petrelSteps = (bond: DemoBond): DemoStep[] => [
   {
     kind: "clean",
     title: "Strip resist, etch seed",
-    handling: { topography: measured(4e-6, 0.5e-6, "measured here") },
+    handling: { solvent: "polar aprotic", topography: measured(4e-6, 0.5e-6, "measured here") },
     peak: 60,
     minutes: 10,
     equipment: "Single-wafer wet or plating",

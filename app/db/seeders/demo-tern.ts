@@ -53,6 +53,7 @@ export const TERN_STEPS: DemoStep[] = [
   {
     kind: "pattern",
     title: "Coat, expose, develop resist",
+    handling: { solvent: "ester or glycol ether" },
     peak: 110,
     minutes: 3,
     equipment: "Coat and develop track",
@@ -71,6 +72,7 @@ export const TERN_STEPS: DemoStep[] = [
   {
     kind: "clean",
     title: "Strip resist, etch seed between lines",
+    handling: { solvent: "polar aprotic" },
     peak: 60,
     minutes: 10,
     equipment: "Single-wafer wet or plating",
