@@ -5,9 +5,9 @@ import { Silicon } from "#app/db/entities/silicon.ts";
 import { StackLayer } from "#app/db/entities/stack-layer.ts";
 import { Stack } from "#app/db/entities/stack.ts";
 import type { Measured } from "#app/engine/measured.ts";
-import type { FilmLines } from "#app/engine/patterned/pattern.ts";
 import type { Side } from "#app/engine/vocabulary.ts";
 import { PAGE_SIZE, type ListPage, type ListParams } from "#app/lib/list-params.ts";
+import type { CutFilm } from "#app/lib/film-cut.ts";
 import { coverRequest } from "#app/lib/stack-of-request.ts";
 import { turnFront } from "#app/lib/stack-order.ts";
 import { mayInProgram, programsWhere, type ProgramPermission } from "#app/policies/permissions.ts";
@@ -27,7 +27,7 @@ import { idFrom } from "./uuid.server.ts";
 
 export const STACK_SORTS = ["updated", "name", "program", "thickness"] as const;
 
-export interface StackLayerDetail {
+export interface StackLayerDetail extends Required<CutFilm> {
   side: Side;
   filmId: string;
   filmName: string;
@@ -40,8 +40,6 @@ export interface StackLayerDetail {
   youngsModulus: number;
   poissonsRatio: number;
   expansion: number;
-  coverage: number;
-  lines: FilmLines | null;
 }
 
 export interface StackDetail {

@@ -1,5 +1,5 @@
 import { bondTitle, type DemoBond, type DemoStep } from "./demo-step.ts";
-import { celsius, measured } from "./measured.ts";
+import { measured } from "./measured.ts";
 
 /** Thickness variation in µm; left out where the material's own share stands. */
 const variation = (micrometres: number | undefined) =>

@@ -1,5 +1,5 @@
 import { bondTitle, type DemoBond, type DemoStep } from "./demo-step.ts";
-import { celsius, measured } from "./measured.ts";
+import { measured } from "./measured.ts";
 
 /** Program Petrel: 300 mm, to 50 µm with back-side metal, on a glass carrier let go by laser. */
 export const petrelSteps = (bond: DemoBond): DemoStep[] => [

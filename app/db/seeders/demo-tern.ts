@@ -1,5 +1,5 @@
 import type { DemoStep } from "./demo-step.ts";
-import { celsius, measured } from "./measured.ts";
+import { measured } from "./measured.ts";
 
 /** Program Tern: 200 mm, to 100 µm, redistribution layer and balls, on tape from the grind on. */
 export const TERN_STEPS: DemoStep[] = [
