@@ -355,10 +355,13 @@ for (const colorScheme of ["light", "dark"] as const)
   test.describe(`accessibility, ${colorScheme}`, () => {
     test.use({ colorScheme });
 
-    test("lists, records, forms and limits have no findings", async ({ page }) => {
+    test.beforeEach(async ({ page }) => {
       test.slow();
       await signIn(page, "process owner");
-      for (const list of CHECKED[colorScheme]) {
+    });
+
+    for (const list of CHECKED[colorScheme])
+      test(`the list of ${list}, a record and its form have no findings`, async ({ page }) => {
         await page.goto(`/carriers/${list}`);
         await expectNoAxeFindings(page);
         await page.locator("tbody").getByRole("link").first().click();
@@ -367,7 +370,9 @@ for (const colorScheme of ["light", "dark"] as const)
         await page.getByRole("link", { name: "Change" }).click();
         await expect(page.getByRole("button", { name: /^Save/ })).toBeVisible();
         await expectNoAxeFindings(page);
-      }
+      });
+
+    test("the limits have no findings", async ({ page }) => {
       for (const address of ["/carriers/limits", "/carriers/limits?rule=1"]) {
         await page.goto(address);
         await expectNoAxeFindings(page);

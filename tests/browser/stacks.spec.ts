@@ -87,7 +87,7 @@ test.describe("an engineer", () => {
     await expect(answer).toContainText(/across the notch axis, .* across that/);
     await save(page).click();
     await expect(page).toHaveURL(UUID);
-    await expect(field(page, "layers[0].lineDirection")).toHaveValue("90 °");
+    await expect(field(page, "layers[0].lineDirection")).toHaveValue("90°");
     await expect(page.getByText("lines across the notch axis")).toBeVisible();
     await page.getByText("Film forces", { exact: true }).click();
     await expect(page.getByText("Practical interpolation between exact limits.").first()).toBeVisible();
