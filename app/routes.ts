@@ -34,6 +34,7 @@ export default [
       ]),
       route(":flowId", "routes/_app/flows/flow.tsx"),
       route(":flowId/edit", "routes/_app/flows/edit.tsx"),
+      route(":flowId/keep", "routes/_app/flows/keep.tsx"),
       route(":flowId/what-if", "routes/_app/flows/what-if.ts"),
       route(":flowId/steps/new", "routes/_app/flows/new-step.tsx"),
       route(":flowId/steps/:stepId", "routes/_app/flows/step.tsx"),

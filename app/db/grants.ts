@@ -14,6 +14,7 @@ const READ_AND_WRITE = [
   "carrier",
   "carrier_unit",
   "bonding_material",
+  "tape",
   "equipment",
   "site_limit",
   "stack",

@@ -44,6 +44,23 @@ export type SourceKind = (typeof SOURCE_KINDS)[number];
 export const SHAPE_WORDS = ["flat", "edges up", "edges down", "saddle", "rolls up", "held"] as const;
 export type ShapeWord = (typeof SHAPE_WORDS)[number];
 
+/** Said in place of a direction where the warp is smaller than the ± beside it: which edges lie up is then not known. */
+export const FLAT_WITHIN_UNCERTAINTY = "flat within its uncertainty";
+
+/**
+ * Whether a warp (m) is smaller than its expanded uncertainty, k = 2, the ± that stands beside it; never where that is unknown.
+ * A warp has no sign, so an uncertainty of the warp itself shrinks with it near zero, but never below it.
+ */
+export function flatWithinUncertainty(warp: number, standardUncertainty: number | null): boolean {
+  return standardUncertainty !== null && warp < 2 * standardUncertainty;
+}
+
+/** The word for how it lies, or that its uncertainty does not tell. */
+export function knownShapeWord(word: ShapeWord, warp: number, standardUncertainty: number | null): string {
+  const bent = word === "edges up" || word === "edges down" || word === "saddle";
+  return bent && flatWithinUncertainty(warp, standardUncertainty) ? FLAT_WITHIN_UNCERTAINTY : word;
+}
+
 /** Which face is up on the tool: from bond to debond usually the one away from the carrier that the wafer lies on. */
 export const FACES_UP = ["device side", "back side"] as const;
 export type FaceUp = (typeof FACES_UP)[number];

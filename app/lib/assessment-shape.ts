@@ -1,6 +1,12 @@
 import { formatQuantity } from "#app/engine/units/format.ts";
-import type { Holding, ShapeWord } from "#app/engine/vocabulary.ts";
-import type { ShapeResult } from "#app/schemas/assessment-result.ts";
+import {
+  FLAT_WITHIN_UNCERTAINTY,
+  flatWithinUncertainty,
+  knownShapeWord,
+  type Holding,
+  type ShapeWord,
+} from "#app/engine/vocabulary.ts";
+import type { ShapeResult, StepResult } from "#app/schemas/assessment-result.ts";
 import { micrometres } from "./assessment-figure.ts";
 import { isRolled } from "./lying-as.ts";
 
@@ -15,12 +21,21 @@ export function shapeText(shape: ShapeResult, word?: ShapeWord): string {
     return `rolls up, radius about ${radiusText(shape.rollRadius)}, edges lift ${liftText(shape.warp)}`;
   const size = micrometres(shape.warp, shape.standardUncertainty);
   if (word === "flat") return `flat, ${size}`;
+  if (flatWithinUncertainty(shape.warp, shape.standardUncertainty)) return `${FLAT_WITHIN_UNCERTAINTY}, ${size}`;
+  if (word === "saddle") return `saddle, ${size}`;
   return `${shape.edgesUp ? "edges up" : "edges down"} ${size}`;
 }
 
-/** The standard bow beside it: 'standard bow −231 ± 52 µm'; null for a wafer that has rolled up, which has none. */
+/** The one word for how it lies, or that its uncertainty does not tell. */
+export function liesWord({ lies, atRoom }: Pick<StepResult, "lies" | "atRoom">): string {
+  return atRoom ? knownShapeWord(lies, atRoom.warp, atRoom.standardUncertainty) : lies;
+}
+
+/** The standard bow beside it: 'standard bow −231 ± 52 µm', with that of the other axis where they differ; null for a wafer that has rolled up, which has none. */
 export function standardBowText(shape: ShapeResult): string | null {
-  return isRolled(shape) ? null : `standard bow ${micrometres(shape.bow, shape.standardUncertainty)}`;
+  if (isRolled(shape)) return null;
+  const across = typeof shape.bowAcross === "number" ? `, across it ${micrometres(shape.bowAcross)}` : "";
+  return `standard bow ${micrometres(shape.bow, shape.standardUncertainty)}${across}`;
 }
 
 /**

@@ -4,7 +4,7 @@ import type { FaceUp, Holding, Outcome, SupportClass } from "#app/engine/vocabul
 import type { AssessmentResult, BondResult, StepResult } from "#app/schemas/assessment-result.ts";
 import { celsius, micrometres } from "./assessment-figure.ts";
 import { bySeverity, findingNote } from "./assessment-finding.ts";
-import { shapeText } from "./assessment-shape.ts";
+import { liesWord, shapeText } from "./assessment-shape.ts";
 import { formatBare, withoutUnit } from "./format-measured.ts";
 import { BOTH_CARRIERS } from "./flow-rows.ts";
 import { isRolled, lyingAs } from "./lying-as.ts";
@@ -61,7 +61,7 @@ function stepRow(step: StepResult, findings: Finding[], bonds: BondResult[]): St
     bow: { shape: lyingAs(atRoom), deviceSideUp: isUp(faceUp), holding: planned },
     warp: warpShare(findings),
     warpText: atRoom && !isRolled(atRoom) ? withoutUnit(micrometres(atRoom.warp, atRoom.standardUncertainty)) : NONE,
-    liesAs: atRoom && isRolled(atRoom) ? shapeText(atRoom) : step.lies,
+    liesAs: atRoom && isRolled(atRoom) ? shapeText(atRoom) : liesWord(step),
     limitText: limitText(step),
     heldBy: sentenceCase(planned),
     planned: planned === "bare" ? null : plannedInFull(step, bonds),

@@ -3,6 +3,7 @@ import type {
   CarrierHandlingValues,
   EquipmentHandlingValues,
   FilmHandlingValues,
+  TapeHandlingValues,
 } from "#app/schemas/library-handling.ts";
 
 /** What the handling rules ask of a record of the library, with nothing given yet. */
@@ -13,7 +14,7 @@ export const BLANK_CARRIER_HANDLING: CarrierHandlingValues = {
   seenBySensors: null,
 };
 
-export const BLANK_MATERIAL_HANDLING: BondingMaterialHandlingValues = {
+const NO_RESISTANCES = {
   vacuum: null,
   plasma: null,
   solvent: null,
@@ -21,6 +22,12 @@ export const BLANK_MATERIAL_HANDLING: BondingMaterialHandlingValues = {
   base: null,
   ultraviolet: null,
   attackedBy: [],
+};
+
+export const BLANK_TAPE_HANDLING: TapeHandlingValues = { ...NO_RESISTANCES, releasesInLight: null };
+
+export const BLANK_MATERIAL_HANDLING: BondingMaterialHandlingValues = {
+  ...NO_RESISTANCES,
   remover: null,
   vacuumTemperatureLimit: null,
   weightLoss: null,

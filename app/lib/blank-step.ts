@@ -52,6 +52,7 @@ export const BLANK_STEP: Omit<StepValues, "kind" | "title"> = {
   bondingMaterial: null,
   bondThickness: null,
   groundFaceForce: null,
+  tape: null,
   films: [],
   handling: BLANK_HANDLING,
 };

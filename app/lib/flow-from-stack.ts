@@ -1,10 +1,12 @@
 import type { FilmKind } from "#app/engine/flow/model.ts";
 import type { Measured } from "#app/engine/measured.ts";
 import { exceeds, reaches } from "#app/engine/rules/against-limit.ts";
+import type { FilmLines } from "#app/engine/patterned/pattern.ts";
 import { formatQuantity } from "#app/engine/units/format.ts";
 import type { Exposure, Holding, Side } from "#app/engine/vocabulary.ts";
 import type { StepValues } from "#app/schemas/flow.ts";
 import { BLANK_STEP } from "./blank-step.ts";
+import { filmCutWords } from "./film-cut.ts";
 import { filmThicknessText } from "./flow-thickness.ts";
 
 /**
@@ -22,6 +24,7 @@ export interface StackFilm {
   /** the stack's own; null keeps the film's */
   stress: Measured | null;
   coverage: number;
+  lines?: FilmLines | null;
 }
 
 /** The carrier and bonding material that the person chose. */
@@ -97,10 +100,15 @@ const minutes = (count: number) => count * 60;
 const PLASMA: Exposure[] = ["vacuum", "plasma"];
 
 /** How a film comes onto the wafer, by its kind; thick metal is plated, thin metal sputtered. */
-function filmStep({ id, name, kind, side, thickness, stress, coverage }: StackFilm, planned: Holding): Sketch {
-  const share = coverage < 1 ? `, ${formatQuantity(coverage, "fraction", { unit: "%" })}` : "";
-  const what = `${name}, ${filmThicknessText(thickness.value)}${share}`.replaceAll("\u00A0", " ");
-  const films = [{ change: "adds" as const, side, film: id, thickness, stress, coverage }];
+function filmStep(
+  { id, name, kind, side, thickness, stress, coverage, lines = null }: StackFilm,
+  planned: Holding,
+): Sketch {
+  const what = [name, filmThicknessText(thickness.value), filmCutWords({ coverage, lines })]
+    .filter(Boolean)
+    .join(", ")
+    .replaceAll("\u00A0", " ");
+  const films = [{ change: "adds" as const, side, film: id, thickness, stress, coverage, lines }];
   const back = side === "back";
   switch (kind) {
     case "polymer":

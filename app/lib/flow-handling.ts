@@ -11,7 +11,8 @@ function given<Value extends object>(record: Value): Partial<Given<Value>> {
   ) as Partial<Given<Value>>;
 }
 
-function tapeOf(handling: StepHandlingValues): TapeInput | null {
+/** The tape that a step names, what it states of it itself before what the library says; null when it says nothing of any. */
+export function tapeOf(handling: StepHandlingValues, chosen: TapeInput | null): TapeInput | null {
   const word = (key: "Vacuum" | "Plasma" | "Solvent" | "Acid" | "Base" | "Ultraviolet") => {
     const stands = handling[`tape${key}`];
     return stands === null ? null : { word: stands };
@@ -30,14 +31,19 @@ function tapeOf(handling: StepHandlingValues): TapeInput | null {
     thicknessVariation: handling.tapeThicknessVariation,
     longestTime: handling.tapeLongestTime,
     releasesInLight: handling.tapeReleasesInLight,
-    resistances: Object.keys(resistances).length > 0 ? resistances : null,
   });
-  if (Object.keys(tape).length === 0 && handling.tapeName === null) return null;
-  return { name: handling.tapeName ?? "the tape", ...tape };
+  const stated = Object.keys(resistances).length > 0;
+  if (!chosen && !stated && Object.keys(tape).length === 0 && handling.tapeName === null) return null;
+  return {
+    ...chosen,
+    name: handling.tapeName ?? chosen?.name ?? "the tape",
+    ...tape,
+    ...(stated && { resistances: { ...chosen?.resistances, ...resistances } }),
+  };
 }
 
-/** A step's handling as the engine takes it. */
-export function stepHandlingOf(handling: StepHandlingValues): StepHandling {
+/** A step's handling as the engine takes it, on the tape of the library that it chose. */
+export function stepHandlingOf(handling: StepHandlingValues, tape: TapeInput | null): StepHandling {
   const { exposureTimes, contactFace, contactMeans, bumpHeight, bumpPeelForce } = handling;
   return given({
     exposureTimes: Object.keys(exposureTimes).length > 0 ? exposureTimes : null,
@@ -45,7 +51,7 @@ export function stepHandlingOf(handling: StepHandlingValues): StepHandling {
     solvent: handling.solvent,
     dehydrationBake: handling.dehydrationBake,
     contact: contactFace && contactMeans ? { face: contactFace, means: contactMeans } : null,
-    tape: tapeOf(handling),
+    tape: tapeOf(handling, tape),
     inLine: handling.inLine,
     timeSincePrevious: handling.timeSincePrevious,
     bumps: bumpHeight ? { height: bumpHeight, ...given({ standsPeelForce: bumpPeelForce }) } : null,

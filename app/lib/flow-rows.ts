@@ -1,10 +1,12 @@
 import { spansOfKinds } from "#app/engine/finder/bond-spans.ts";
 import type { StepKind } from "#app/engine/flow/model.ts";
 import type { Measured } from "#app/engine/measured.ts";
+import type { FilmLines } from "#app/engine/patterned/pattern.ts";
 import { formatQuantity } from "#app/engine/units/format.ts";
 import { SIDE_NAMES, type Exposure, type FaceUp, type Holding, type Side } from "#app/engine/vocabulary.ts";
 import type { StepHandlingValues } from "#app/schemas/step-handling.ts";
 import { withPieceMark } from "./carrier-units.ts";
+import { filmCutWords } from "./film-cut.ts";
 import { holdWords, runWords } from "./run-words.ts";
 import { filmThicknessText, siliconText } from "./flow-thickness.ts";
 import { formatBare } from "./format-measured.ts";
@@ -35,6 +37,7 @@ export interface ShownStep {
     film: { name: string };
     thickness: Measured | null;
     coverage: number;
+    lines?: FilmLines | null;
   }[];
 }
 
@@ -76,11 +79,11 @@ export interface StepChange {
 
 const length = (value: number, unit: string) => formatQuantity(value, "length", { unit });
 
-function filmChange({ change, side, film, thickness, coverage }: ShownStep["films"][number]): StepChange {
+function filmChange({ change, side, film, thickness, coverage, lines }: ShownStep["films"][number]): StepChange {
   const parts = [
     film.name,
     thickness && filmThicknessText(thickness.value),
-    change === "adds" && coverage < 1 ? formatQuantity(coverage, "fraction", { unit: "%" }) : null,
+    change === "adds" ? filmCutWords({ coverage, lines }) : null,
   ];
   return { word: change, what: parts.filter(Boolean).join(", "), side: SIDE_NAMES[side] };
 }

@@ -23,4 +23,5 @@ export interface StepChoices {
   /** none where no piece may be named, as in a step for every flow */
   pieces: PieceChoice[];
   materials: ExplainedChoice[];
+  tapes: ExplainedChoice[];
 }

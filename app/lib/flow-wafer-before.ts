@@ -2,9 +2,8 @@ import { EngineInputError } from "#app/engine/errors.ts";
 import { bondedFace, type BondState } from "#app/engine/flow/bond.ts";
 import type { FlowInput } from "#app/engine/flow/model.ts";
 import { applyStep, initialState, type FilmState, type WaferState } from "#app/engine/flow/state.ts";
-import type { FaceUp } from "#app/engine/vocabulary.ts";
-import { formatQuantity } from "#app/engine/units/format.ts";
-import { SIDE_NAMES } from "#app/engine/vocabulary.ts";
+import { SIDE_NAMES, type FaceUp } from "#app/engine/vocabulary.ts";
+import { filmCutWords } from "./film-cut.ts";
 import { filmThicknessText, siliconText } from "./flow-thickness.ts";
 
 /** The wafer as a step finds it, in words. */
@@ -19,9 +18,9 @@ export interface WaferBefore {
   faceUp: FaceUp;
 }
 
-function filmWords({ addition: { film, thickness, coverage } }: FilmState): string {
-  const share = coverage < 1 ? `, ${formatQuantity(coverage, "fraction", { unit: "%" })}` : "";
-  return `${film.name}, ${filmThicknessText(thickness.value)}${share}`;
+function filmWords({ addition: { film, thickness, coverage, pattern } }: FilmState): string {
+  const lines = pattern?.kind === "lines" ? { width: pattern.lineWidth, direction: pattern.direction } : null;
+  return [film.name, filmThicknessText(thickness.value), filmCutWords({ coverage, lines })].filter(Boolean).join(", ");
 }
 
 /** 'Glass carrier, Laser-release adhesive'; between two carriers each with its face. */

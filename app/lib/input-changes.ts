@@ -20,6 +20,7 @@ const RECORD_WORDS = {
   film: "Film",
   carrier: "Carrier",
   bondingMaterial: "Bonding material",
+  tape: "Tape",
   equipment: "Tool",
 } as const;
 
@@ -28,6 +29,7 @@ const RECORDS: Record<string, keyof typeof RECORD_WORDS> = {
   film: "film",
   carrier: "carrier",
   material: "bondingMaterial",
+  tape: "tape",
   equipment: "equipment",
 };
 

@@ -1,5 +1,6 @@
 import { BONDING_MATERIAL_PROPERTIES } from "#app/components/carriers/bonding-material-properties.ts";
 import { CARRIER_PROPERTIES } from "#app/components/carriers/carrier-properties.ts";
+import { TAPE_PROPERTIES } from "#app/components/carriers/tape-properties.ts";
 import { TOOL_PROPERTIES } from "#app/components/carriers/tool-properties.ts";
 import { FILM_PROPERTIES } from "#app/components/films/film-properties.ts";
 import type { Measured } from "#app/engine/measured.ts";
@@ -65,6 +66,7 @@ const OTHER: Record<string, InputProperty> = {
   leastThickness: { label: "Thinnest bond it is made for", dimension: "length", unit: "µm" },
   mostThickness: { label: "Thickest bond it is made for", dimension: "length", unit: "µm" },
   filmShare: { label: "Film part of the incoming shape", dimension: "fraction", unit: "%" },
+  expansionCurve: { label: "Expansion over temperature" },
   meanExpansionOver: { label: "Expansion is a mean over" },
   from: { label: "Expansion is a mean from", dimension: "temperature", unit: "°C" },
   to: { label: "Expansion is a mean to", dimension: "temperature", unit: "°C" },
@@ -74,6 +76,7 @@ const TABLES: Partial<Record<InputRecord, Record<string, InputProperty>>> = {
   film: FILM_PROPERTIES,
   carrier: CARRIER_PROPERTIES,
   bondingMaterial: BONDING_MATERIAL_PROPERTIES,
+  tape: TAPE_PROPERTIES,
   equipment: TOOL_PROPERTIES,
 };
 

@@ -11,6 +11,7 @@ import type {
   CarrierHandlingValues,
   EquipmentHandlingValues,
   FilmHandlingValues,
+  TapeHandlingValues,
 } from "#app/schemas/library-handling.ts";
 import type { CarrierUnitRow } from "./carrier-units.ts";
 import { given } from "./given.ts";
@@ -61,10 +62,10 @@ interface MaterialFacts {
   handling: BondingMaterialHandlingValues;
 }
 
-/** What the handling rules ask of a bonding material. */
-export function bondingMaterialHandlingOf(material: MaterialFacts): BondingMaterialHandling {
-  const { thicknessVariationShare, leastThickness, mostThickness, thermalCycles, handling } = material;
-  const { vacuum, plasma, solvent, acid, base, ultraviolet, attackedBy, ...rest } = handling;
+type ResistanceValues = Omit<TapeHandlingValues, "releasesInLight">;
+
+/** What is given of what a material stands, as the rules take it; null when nothing is. */
+function resistancesOf({ vacuum, plasma, solvent, acid, base, ultraviolet, attackedBy }: ResistanceValues) {
   const resistances = given({
     vacuum,
     plasma,
@@ -74,14 +75,19 @@ export function bondingMaterialHandlingOf(material: MaterialFacts): BondingMater
     ultraviolet,
     attackedBy: attackedBy.length > 0 ? attackedBy : null,
   });
+  return Object.keys(resistances).length > 0 ? resistances : null;
+}
+
+/** What the handling rules ask of a bonding material. */
+export function bondingMaterialHandlingOf(material: MaterialFacts): BondingMaterialHandling {
+  const { thicknessVariationShare, leastThickness, mostThickness, thermalCycles, handling } = material;
+  const { vacuum, plasma, solvent, acid, base, ultraviolet, attackedBy, ...rest } = handling;
+  const resistances = resistancesOf({ vacuum, plasma, solvent, acid, base, ultraviolet, attackedBy });
   return {
     thicknessVariationShare,
     leastThickness,
     mostThickness,
-    ...given({
-      resistances: Object.keys(resistances).length > 0 ? resistances : null,
-      thermalCycles: cycles(thermalCycles),
-    }),
+    ...given({ resistances, thermalCycles: cycles(thermalCycles) }),
     ...given(rest),
   };
 }
@@ -91,6 +97,11 @@ const cycles = (count: number | null | undefined): Measured | null =>
   typeof count === "number"
     ? { value: count, tolerance: null, source: "assumed", note: "no source is kept with this count" }
     : null;
+
+/** What a tape stands and whether light lets it go, as the engine takes it. */
+export function tapeHandlingOf({ releasesInLight, ...stands }: TapeHandlingValues) {
+  return { releasesInLight, resistances: resistancesOf(stands) };
+}
 
 /** What the handling rules ask of a tool. */
 export function equipmentHandlingOf({

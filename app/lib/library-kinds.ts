@@ -2,6 +2,7 @@
 export const KINDS = {
   carriers: { title: "Carriers", one: "carrier", many: "carriers" },
   "bonding-materials": { title: "Bonding materials", one: "bonding material", many: "bonding materials" },
+  tapes: { title: "Tapes", one: "tape", many: "tapes" },
   silicon: { title: "Silicon", one: "silicon wafer", many: "silicon wafers" },
   tools: { title: "Tools", one: "tool", many: "tools" },
 } as const;
@@ -12,6 +13,7 @@ export type KindSlug = keyof typeof KINDS;
 export const KIND_KEYS = {
   carriers: "carrier",
   "bonding-materials": "bondingMaterial",
+  tapes: "tape",
   silicon: "silicon",
   tools: "equipment",
 } as const satisfies Record<KindSlug, string>;

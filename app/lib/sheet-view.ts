@@ -9,11 +9,13 @@ import {
   type Holding,
   type Outcome,
   type SupportClass,
+  FLAT_WITHIN_UNCERTAINTY,
 } from "#app/engine/vocabulary.ts";
 import type { AssessmentResult, BondResult, ShapeResult, StepResult } from "#app/schemas/assessment-result.ts";
 import { withPieceMark } from "./carrier-units.ts";
 import { celsius } from "./assessment-figure.ts";
 import { assessmentNumber } from "./assessment-number.ts";
+import { liesWord } from "./assessment-shape.ts";
 import { revisionOf } from "./assessment-revision.ts";
 import { isRolled, lyingAs } from "./lying-as.ts";
 import { sentenceCase } from "./assessment-steps.ts";
@@ -213,8 +215,13 @@ function worstShape(steps: readonly StepResult[]): StepResult | null {
 
 /** How it lies as loaded, the worst of each direction. */
 function shapeLines(steps: readonly StepResult[]): string[] {
-  const bent = steps.filter(({ lies }) => lies !== "flat").flatMap(({ atRoom }) => (atRoom ? [atRoom] : []));
-  if (bent.length === 0) return [steps.some(({ atRoom }) => atRoom) ? "flat" : "held flat"];
+  const words = steps.map(liesWord);
+  const isBent = (_: unknown, at: number) => words[at] !== "flat" && words[at] !== FLAT_WITHIN_UNCERTAINTY;
+  const bent = steps.filter(isBent).flatMap(({ atRoom }) => (atRoom ? [atRoom] : []));
+  if (bent.length === 0) {
+    if (words.includes(FLAT_WITHIN_UNCERTAINTY)) return [FLAT_WITHIN_UNCERTAINTY];
+    return [steps.some(({ atRoom }) => atRoom) ? "flat" : "held flat"];
+  }
   const rolled = bent.filter(isRolled);
   if (rolled.length > 0) return [`rolls up, radius about ${roundedRadius(Math.min(...rolled.map(radius)))}`];
   return [

@@ -4,7 +4,9 @@ import { formatQuantity } from "#app/engine/units/format.ts";
 import { SOURCE_KINDS, type Side, type SourceKind } from "#app/engine/vocabulary.ts";
 import type { EstimateRequest } from "#app/schemas/estimate.ts";
 import { RULES } from "#app/schemas/ranges.ts";
+import { readFilmCut, type CutFilm } from "./film-cut.ts";
 import { readQuantity, toleranceRule, type ReadQuantity } from "./read-quantity.ts";
+import { coverRequest } from "./stack-of-request.ts";
 import { turnFront } from "./stack-order.ts";
 import type { LayerText, StackText } from "./stack-text.ts";
 
@@ -45,7 +47,8 @@ export interface DraftLayer {
   thicknessSource: SourceKind;
   /** the stress that counts: this stack's own, else the film's */
   stress: Pick<Measured, "value" | "tolerance" | "source" | "on"> | null;
-  coverage: number | null;
+  /** the area that it covers, and how; null while that is missing */
+  cut: CutFilm | null;
   /** what is unusual but not wrong */
   remarks: string[];
 }
@@ -152,7 +155,7 @@ function readLayer(
     readQuantity(text.thickness.tolerance, toleranceRule(RULES.filmThickness)),
     true,
   );
-  const coverage = note(`${at}.coverage`, `area coverage of ${name}`, readQuantity(text.coverage, RULES.coverage));
+  const cut = readFilmCut(text, (part, read) => note(`${at}.${part}`, `${CUT_PARTS[part]} of ${name}`, read));
   const own = readQuantity(text.stress.value, RULES.stress);
   note(`${at}.stress.value`, `stress of ${name}`, own, true);
   const stressTolerance = note(
@@ -179,10 +182,12 @@ function readLayer(
     thicknessTolerance,
     thicknessSource: sourceOf(text.thickness.source),
     stress,
-    coverage,
+    cut,
     remarks: layerRemarks(stress?.value ?? 0, thickness, silicon),
   };
 }
+
+const CUT_PARTS = { coverage: "area coverage", lineWidth: "line width", lineDirection: "direction of the lines" };
 
 /** Where a value comes from; what nobody says is assumed. */
 const sourceOf = (text: string | undefined): SourceKind => SOURCE_KINDS.find((kind) => kind === text) ?? "assumed";
@@ -214,23 +219,22 @@ function requestOf(
       ...(tolerance !== null && { thickness_tolerance_m: tolerance }),
       orientation: silicon.orientation,
     },
-    films: turnFront(layers).flatMap(
-      ({ side, film, thickness: filmThickness, thicknessTolerance, stress, coverage }) =>
-        film && stress && filmThickness !== null && coverage !== null
-          ? [
-              {
-                side,
-                thickness_m: filmThickness,
-                stress_Pa: stress.value,
-                youngs_modulus_Pa: film.youngsModulus,
-                poissons_ratio: film.poissonsRatio,
-                cte_per_K: film.expansion,
-                coverage,
-                ...(thicknessTolerance !== null && { thickness_tolerance_m: thicknessTolerance }),
-                ...(stress.tolerance !== null && { stress_tolerance_Pa: stress.tolerance }),
-              },
-            ]
-          : [],
+    films: turnFront(layers).flatMap(({ side, film, thickness: filmThickness, thicknessTolerance, stress, cut }) =>
+      film && stress && filmThickness !== null && cut !== null
+        ? [
+            {
+              side,
+              thickness_m: filmThickness,
+              stress_Pa: stress.value,
+              youngs_modulus_Pa: film.youngsModulus,
+              poissons_ratio: film.poissonsRatio,
+              cte_per_K: film.expansion,
+              ...coverRequest(cut),
+              ...(thicknessTolerance !== null && { thickness_tolerance_m: thicknessTolerance }),
+              ...(stress.tolerance !== null && { stress_tolerance_Pa: stress.tolerance }),
+            },
+          ]
+        : [],
     ),
   };
 }

@@ -1,5 +1,15 @@
 import type { StackInput } from "#app/engine/stack/model.ts";
 import type { EstimateRequest } from "#app/schemas/estimate.ts";
+import type { CutFilm } from "./film-cut.ts";
+
+/** What a request says of the area that a film covers. */
+export const coverRequest = ({
+  coverage,
+  lines,
+}: CutFilm): Pick<EstimateRequest["films"][number], "coverage" | "lines"> => ({
+  coverage,
+  ...(lines && { lines: { width_m: lines.width, direction_rad: lines.direction } }),
+});
 
 /** The engine's view of a request. */
 export function stackOf({ wafer, films, temperature_K }: EstimateRequest): StackInput {
@@ -19,6 +29,7 @@ export function stackOf({ wafer, films, temperature_K }: EstimateRequest): Stack
       expansion: film.cte_per_K,
       referenceTemperature: film.reference_temperature_K,
       coverage: film.coverage,
+      lines: film.lines && { width: film.lines.width_m, direction: film.lines.direction_rad },
       thicknessTolerance: film.thickness_tolerance_m,
       stressTolerance: film.stress_tolerance_Pa,
     })),

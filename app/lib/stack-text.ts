@@ -1,7 +1,9 @@
 import type { MeasuredText } from "#app/components/forms/MeasuredField.tsx";
 import type { Measured } from "#app/engine/measured.ts";
+import type { FilmLines } from "#app/engine/patterned/pattern.ts";
 import type { Side } from "#app/engine/vocabulary.ts";
-import { measuredText, quantityText } from "./form-values.ts";
+import { filmCutText, WHOLE, type FilmCutText } from "./film-cut.ts";
+import { measuredText } from "./form-values.ts";
 import { turnFront } from "./stack-order.ts";
 
 /** A film of a stack as the text of its form fields. */
@@ -11,8 +13,7 @@ export type LayerText = {
   thickness: MeasuredText;
   /** this stack's own; blank keeps the film's */
   stress: MeasuredText;
-  coverage: string;
-};
+} & FilmCutText;
 
 /** A stack as the text of its form; films as the cut shows them, top to bottom. */
 export type StackText = {
@@ -37,6 +38,7 @@ interface StoredStack {
     thickness: Measured;
     ownStress: Measured | null;
     coverage: number;
+    lines: FilmLines | null;
   }[];
 }
 
@@ -53,7 +55,7 @@ export function textOfStack(stack: StoredStack): StackText {
       film: layer.filmId,
       thickness: measuredText(layer.thickness, "length"),
       stress: measuredText(layer.ownStress, "stress", { unit: "MPa" }),
-      coverage: quantityText(layer.coverage, "fraction", "%"),
+      ...filmCutText(layer),
     })),
   };
 }
@@ -65,7 +67,7 @@ export function newStackText(program: string): StackText {
 
 /** A film that has just been added: it covers the wafer until somebody says otherwise. */
 export function newLayer(side: Side): LayerText {
-  return { side, film: "", thickness: {}, stress: {}, coverage: "100 %" };
+  return { side, film: "", thickness: {}, stress: {}, ...WHOLE };
 }
 
 /** A form's payload as text, whatever it holds: what is missing is blank. */
@@ -83,7 +85,10 @@ export function stackText(payload: unknown): StackText {
           film: textAt(layer, "film"),
           thickness: measuredAt(layer, "thickness"),
           stress: measuredAt(layer, "stress"),
+          cut: textAt(layer, "cut"),
           coverage: textAt(layer, "coverage"),
+          lineWidth: textAt(layer, "lineWidth"),
+          lineDirection: textAt(layer, "lineDirection"),
         }))
       : [],
   };

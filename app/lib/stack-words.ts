@@ -2,7 +2,12 @@ import { thicknessLimits } from "#app/engine/rules/required-support.ts";
 import type { SiteLimits } from "#app/engine/rules/limits.ts";
 import { formatNumber } from "#app/engine/units/format-number.ts";
 import { formatQuantity, formatWithUncertainty } from "#app/engine/units/format.ts";
-import type { Outcome, SupportClass } from "#app/engine/vocabulary.ts";
+import {
+  FLAT_WITHIN_UNCERTAINTY,
+  flatWithinUncertainty,
+  type Outcome,
+  type SupportClass,
+} from "#app/engine/vocabulary.ts";
 import type { EstimateAnswer, EstimateRequest } from "#app/schemas/estimate.ts";
 import type { WarpSpread } from "./warp-sampling.ts";
 
@@ -45,9 +50,13 @@ export const radiusWords = (metres: number) =>
  * How the free wafer lies with its device side up: 'flat', 'edges up 343 µm', or 'rolls up, radius about 0.44 m'. A curled wafer
  * never gets a bow.
  */
-export function shapeWords({ regime, bow_m, warp_m, roll_radius_m }: Shape, flatWithin: number): string {
+export function shapeWords(shape: Shape, flatWithin: number): string {
+  const { regime, bow_m, across, warp_m, roll_radius_m, warp_standard_uncertainty_m } = shape;
   if (regime === "curled" && roll_radius_m !== null) return `rolls up, radius about ${radiusWords(roll_radius_m)}`;
   if (warp_m <= flatWithin) return "flat";
+  if (flatWithinUncertainty(warp_m, warp_standard_uncertainty_m)) return FLAT_WITHIN_UNCERTAINTY;
+  if (across && across.bow_m * bow_m < 0 && Math.abs(across.bow_m) > flatWithin)
+    return `saddle, ${lengthWords(warp_m)}`;
   return `${bow_m < 0 ? "edges up" : "edges down"} ${lengthWords(warp_m)}`;
 }
 

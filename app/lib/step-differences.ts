@@ -4,6 +4,7 @@ import type { Dimension } from "#app/engine/units/dimensions.ts";
 import { formatQuantity } from "#app/engine/units/format.ts";
 import type { StepDifference } from "#app/schemas/flow-plan.ts";
 import type { StepValues } from "#app/schemas/flow.ts";
+import { filmCutWords } from "./film-cut.ts";
 import { stepHandlingWords } from "./step-handling-words.ts";
 import type { ExplainedChoice, StepChoices } from "./flow-step-choices.ts";
 
@@ -22,13 +23,13 @@ const pieceWords = ({ pieces }: StepChoices, id: string | null) =>
 function filmWords({ films }: StepValues, choices: StepChoices): string {
   if (films.length === 0) return "none";
   return films
-    .map(({ change, side, film, thickness, stress, coverage }) =>
+    .map(({ change, side, film, thickness, stress, coverage, lines }) =>
       [
         `${change} ${choiceWords(choices.films, film)}`,
         side === "front" ? "device side" : "back side",
         thickness && measuredWords(thickness, "length", "µm"),
         stress && measuredWords(stress, "stress", "MPa"),
-        coverage !== null && coverage < 1 && formatQuantity(coverage, "fraction", { unit: "%" }),
+        coverage !== null && filmCutWords({ coverage, lines }),
       ]
         .filter(Boolean)
         .join(", "),
@@ -54,6 +55,7 @@ function stepWords(step: StepValues, choices: StepChoices): [label: string, word
     ["Piece of the carrier", pieceWords(choices, step.handling.carrierPiece)],
     ["Bonding material", choiceWords(choices.materials, step.bondingMaterial)],
     ["Thickness of the bond", measuredWords(step.bondThickness, "length", "µm")],
+    ["Tape of the library", choiceWords(choices.tapes, step.tape)],
     ["Films", filmWords(step, choices)],
     ...stepHandlingWords(step.handling).map(([label, words]): [string, string] => [label, words ?? NOTHING]),
   ];

@@ -9,7 +9,7 @@ export interface AssessmentInput {
 }
 
 /** Kinds of record that an input comes from: the flow itself, a record of the library, a limit of the site. */
-export const INPUT_RECORDS = ["flow", "film", "carrier", "bondingMaterial", "equipment", "limit"] as const;
+export const INPUT_RECORDS = ["flow", "film", "carrier", "bondingMaterial", "tape", "equipment", "limit"] as const;
 export type InputRecord = (typeof INPUT_RECORDS)[number];
 
 /** One property that differs between two inputs, in words. */

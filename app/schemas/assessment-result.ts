@@ -19,6 +19,8 @@ import type { Working } from "#app/engine/working.ts";
 export interface ShapeResult {
   temperature: number;
   bow: number;
+  /** bow along the axis across, where the directions differ; absent in results of before it was kept */
+  bowAcross?: number | null;
   warp: number;
   edgesUp: boolean;
   regime: ShapeRegime;

@@ -1,6 +1,8 @@
 import { z } from "zod";
 import { CARRIER_MATERIALS } from "#app/engine/flow/model.ts";
 import { formatQuantity } from "#app/engine/units/format.ts";
+import { curveRangeWords } from "#app/lib/expansion-rows.ts";
+import { optionalExpansionCurve } from "./expansion-curve.ts";
 import { carrierHandling } from "./library-handling.ts";
 import { measured, optionalMeasured, optionalQuantity, quantity } from "./quantity.ts";
 import { RULES } from "./ranges.ts";
@@ -36,6 +38,7 @@ export const carrierSchema = z
     expansionRange: line(100),
     meanExpansionFrom: optionalQuantity({ ...RULES.temperature, label: "lower end of the range" }),
     meanExpansionTo: optionalQuantity({ ...RULES.temperature, label: "upper end of the range" }),
+    expansionCurve: optionalExpansionCurve,
     density: measured(RULES.density),
     thicknessVariation: measured(RULES.thicknessVariation),
     temperatureLimit: measured(limit),
@@ -46,19 +49,36 @@ export const carrierSchema = z
     handling: carrierHandling,
   })
   .superRefine((carrier, context) => {
-    const { material, expansion, expansionRange, meanExpansionFrom: from, meanExpansionTo: to } = carrier;
+    const {
+      material,
+      expansion,
+      expansionCurve,
+      expansionRange,
+      meanExpansionFrom: from,
+      meanExpansionTo: to,
+    } = carrier;
     const fail = (path: string[], message: string) => context.addIssue({ code: "custom", path, message });
     if (from !== null && to === null) fail(["meanExpansionTo"], "Type where the range ends too, or leave both blank.");
     if (to !== null && from === null)
       fail(["meanExpansionFrom"], "Type where the range begins too, or leave both blank.");
     if (from !== null && to !== null && to <= from) fail(["meanExpansionTo"], "The range ends before it begins.");
+    if (expansion !== null && expansionCurve && expansionCurve.tolerance !== null)
+      fail(["expansionCurve", "tolerance"], "With a stated mean, its tolerance counts: clear one of the two.");
     if (material === "glass") {
-      if (expansion === null)
-        fail(["expansion", "value"], "Type the expansion of the glass. Only silicon has its own curve here.");
+      if (expansion === null && expansionCurve === null)
+        fail(["expansion", "value"], "Type the expansion of the glass, or its curve. Only silicon has its own here.");
+      else if (expansion === null && (from !== null || to !== null))
+        fail(
+          ["meanExpansionFrom"],
+          "Type the mean that holds over this range, or leave it blank: the curve has its own.",
+        );
+      else if (expansionCurve !== null) return;
       else if (expansionRange === "" && from === null && to === null)
         fail(["expansionRange"], "Say over which temperatures the expansion is a mean, such as 25 to 150 °C.");
       return;
     }
+    if (expansionCurve !== null)
+      fail(["expansionCurve", "rows"], "Leave it blank: a silicon carrier follows the curve of silicon itself.");
     if (expansion !== null)
       fail(["expansion", "value"], "Leave it blank: a silicon carrier follows the curve of silicon itself.");
     if (from !== null || to !== null)
@@ -66,7 +86,9 @@ export const carrierSchema = z
     if (carrier.passesUltraviolet) fail(["passesUltraviolet"], "Silicon does not pass ultraviolet light.");
   })
   .transform((carrier) => {
-    const { expansion, expansionRange, meanExpansionFrom: from, meanExpansionTo: to } = carrier;
+    const { expansion, expansionCurve, expansionRange, meanExpansionFrom: from, meanExpansionTo: to } = carrier;
+    if (expansion === null && expansionCurve)
+      return { ...carrier, expansionRange: `curve, ${curveRangeWords(expansionCurve).replaceAll("\u00A0", " ")}` };
     if (expansion === null) return { ...carrier, expansionRange: OWN_CURVE };
     if (from === null || to === null || !(expansionRange === "" || WRITTEN_RANGE.test(expansionRange))) return carrier;
     return { ...carrier, expansionRange: meanRange(from, to) };

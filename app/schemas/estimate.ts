@@ -57,6 +57,12 @@ const film = z.strictObject(
     cte_per_K: si("1/K", RULES.expansion.range).optional(),
     reference_temperature_K: si("K", RULES.temperature.range).optional(),
     coverage: si("1", RULES.coverage.range).optional(),
+    lines: z
+      .strictObject(
+        { width_m: si("m", RULES.lineWidth.range), direction_rad: si("rad", RULES.lineDirection.range) },
+        object,
+      )
+      .optional(),
     thickness_tolerance_m: halfWidth("m", RULES.filmThickness.range).optional(),
     stress_tolerance_Pa: halfWidth("Pa", RULES.stress.range).optional(),
   },
@@ -76,7 +82,9 @@ const sweep = z.strictObject(
  * What `POST /api/v1/estimates` is asked: films on a free silicon wafer, SI units in the names. Films of a side are listed from
  * the silicon outwards. `stress_Pa` is that at the film's reference temperature on a thick wafer held flat, tension positive;
  * `cte_per_K` is needed as soon as a temperature differs from the reference, 298.15 K. `sweep` asks for the curve of warp against
- * silicon thickness, `working` for the calculations. Tolerances are half-widths; a value without one counts as exact.
+ * silicon thickness, `working` for the calculations. `lines` cuts a
+ * film into parallel lines that cover its `coverage`, at `direction_rad` counter-clockwise from x, the notch axis, seen from the
+ * device side. Tolerances are half-widths; a value without one counts as exact.
  */
 export const estimateSchema = z
   .strictObject(
@@ -118,6 +126,11 @@ export interface EstimateAnswer {
     regime: ShapeRegime;
     /** centre to rim; of a curled wafer along the rolled axis, where it is no bow but the lift of the edge */
     bow_m: number;
+    /**
+     * where a film is cut in lines, what lies across: bow along the other axis, and the angle of the axis that bends most,
+     * counter-clockwise from x (the notch axis) with the device side up; null where all directions are alike
+     */
+    across: { bow_m: number; axis_rad: number } | null;
     /** peak to valley */
     warp_m: number;
     /** null unless curled */
@@ -131,7 +144,7 @@ export interface EstimateAnswer {
   };
   /** to lift it, at nominal minus tolerance; class null where the site has no limits for the diameter */
   support: { class: SupportClass | null; because: string };
-  /** stress times thickness times coverage of each side, tension positive */
+  /** stress times thickness times coverage of each side, tension positive; of lines the mean of along and across */
   film_force: { front_N_per_m: number; back_N_per_m: number };
   /** free silicon thinner than this rolls about one axis; null when none from 1 µm to 2 mm does, 2 mm when all of it does */
   curls_below_m: number | null;

@@ -1,4 +1,4 @@
-import type { StressRecord, WaferKind } from "#app/engine/flow/handling-inputs.ts";
+import type { StressRecord, TapeInput, WaferKind } from "#app/engine/flow/handling-inputs.ts";
 import type {
   BondingMaterialInput,
   CarrierInput,
@@ -7,6 +7,7 @@ import type {
   StepKind,
 } from "#app/engine/flow/model.ts";
 import type { Measured } from "#app/engine/measured.ts";
+import type { FilmLines } from "#app/engine/patterned/pattern.ts";
 import type { Exposure, Holding, Outcome, Side } from "#app/engine/vocabulary.ts";
 import type { StepHandlingValues } from "./step-handling.ts";
 import type { RecordStamp } from "./record-stamp.ts";
@@ -23,6 +24,8 @@ export interface StepFilmDetail {
   /** what the film's own stress was measured on; null for another stress, or when nothing of it is given */
   stressRecord: StressRecord | null;
   coverage: number;
+  /** of a film cut in lines; null bends both directions alike */
+  lines: FilmLines | null;
 }
 
 /** A step with all that it uses, as screens and the engine need it. */
@@ -42,6 +45,8 @@ export interface StepDetail {
   bondingMaterial: BondingMaterialInput | null;
   bondThickness: Measured | null;
   groundFaceForce: Measured | null;
+  /** the library's; what `handling` says of a tape counts before it */
+  tape: (TapeInput & { id: string }) | null;
   handling: StepHandlingValues;
   films: StepFilmDetail[];
 }

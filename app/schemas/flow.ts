@@ -4,10 +4,12 @@ import { STEP_KINDS } from "#app/engine/flow/model.ts";
 import { profileHeat } from "#app/engine/flow/temperature-profile.ts";
 import { ROOM_TEMPERATURE } from "#app/engine/laminate/layer.ts";
 import type { Measured } from "#app/engine/measured.ts";
-import { EXPOSURES, HOLDINGS } from "#app/engine/vocabulary.ts";
+import type { FilmLines } from "#app/engine/patterned/pattern.ts";
+import { EXPOSURES, HOLDINGS, type Side } from "#app/engine/vocabulary.ts";
 import { exposureKey } from "#app/lib/exposure-key.ts";
 import { inputsOf, KIND_FIELDS } from "#app/lib/flow-step-kinds.ts";
 import { blankMessage } from "#app/lib/read-quantity.ts";
+import { checkFilmCut, filmCutFields, linesOf } from "./film-cut.ts";
 import { measured, optionalMeasured, optionalQuantity } from "./quantity.ts";
 import { RULES } from "./ranges.ts";
 import { recordFields } from "./record-fields.ts";
@@ -74,14 +76,35 @@ export type NewFlowValues = z.output<typeof newFlowSchema>;
 /** Name and note of a flow template. */
 export const templateNameSchema = z.object(recordFields);
 
-const filmChange = z.object({
-  change: z.enum(["adds", "removes"], "Choose whether the step adds or removes it."),
-  side: z.enum(["front", "back"], "Choose the side."),
-  film: z.uuid("Choose a film."),
-  thickness: optionalMeasured({ ...RULES.filmThickness, source: "assumed" }),
-  stress: optionalMeasured({ ...RULES.stress, source: "assumed" }),
-  coverage: optionalQuantity(RULES.coverage),
-});
+/** A film that a step adds or takes off. */
+interface FilmChange {
+  change: "adds" | "removes";
+  side: Side;
+  film: string;
+  thickness: Measured | null;
+  stress: Measured | null;
+  coverage: number | null;
+  /** absent in plans of before lines could be typed: none */
+  lines?: FilmLines | null;
+}
+
+const filmChange = z
+  .object({
+    change: z.enum(["adds", "removes"], "Choose whether the step adds or removes it."),
+    side: z.enum(["front", "back"], "Choose the side."),
+    film: z.uuid("Choose a film."),
+    thickness: optionalMeasured({ ...RULES.filmThickness, source: "assumed" }),
+    stress: optionalMeasured({ ...RULES.stress, source: "assumed" }),
+    ...filmCutFields,
+  })
+  .superRefine((typed, context) => {
+    if (typed.change === "adds")
+      checkFilmCut(typed, (path, message) => context.addIssue({ code: "custom", path, message }));
+  })
+  .transform(({ cut, lineWidth, lineDirection, ...film }): FilmChange => ({
+    ...film,
+    lines: linesOf({ cut, lineWidth, lineDirection }),
+  }));
 
 const PEAK = { ...RULES.temperature, label: "peak temperature" };
 
@@ -105,6 +128,7 @@ const stepFields = z.object({
   bondingMaterial: identifier,
   bondThickness: optionalMeasured({ ...RULES.bondThickness, source: "assumed" }),
   groundFaceForce: optionalMeasured({ ...RULES.faceForce, source: "assumed" }),
+  tape: identifier,
   films: z
     .array(filmChange)
     .max(20, "A step changes at most 20 films.")
@@ -142,6 +166,7 @@ function checkKind(step: Partly<StepFields>, fail: Fail): void {
     if (step.trimWidth) fail(["trimWidth", "value"], only);
     if (step.trimDepth) fail(["trimDepth", "value"], only);
   }
+  if (!has.tape && step.tape) fail(["tape"], "Only a step that puts it on tape has it: leave it blank.");
   if (!has.groundFace && step.groundFaceForce)
     fail(["groundFaceForce", "value"], "Only a grind, stress relief, polish or via reveal changes it: leave it blank.");
   if (step.kind === "grind" && !step.siliconAfter)
@@ -170,7 +195,10 @@ function checkHandling(handling: StepHandlingValues, step: Partly<StepFields>, f
   }
 }
 
-function checkFilm({ change, thickness, stress, coverage }: Partly<StepValues["films"][number]>, fail: Fail): void {
+function checkFilm(
+  { change, thickness, stress, coverage, lines }: Partly<StepValues["films"][number]>,
+  fail: Fail,
+): void {
   if (change === "adds") {
     if (thickness === null) fail(["thickness", "value"], "Type the film thickness. Blank is missing, not zero.");
     if (reachesZero(thickness)) fail(["thickness", "tolerance"], SPREAD);
@@ -180,6 +208,7 @@ function checkFilm({ change, thickness, stress, coverage }: Partly<StepValues["f
   if (thickness) fail(["thickness", "value"], whole);
   if (stress) fail(["stress", "value"], whole);
   if (typeof coverage === "number") fail(["coverage"], whole);
+  if (lines) fail(["lineWidth"], whole);
 }
 
 /** Looks at the fields together. A field that has been spoken of already is not spoken of again. */

@@ -40,7 +40,7 @@ const resistance = z
 
 const temperature = { ...RULES.temperature, toleranceDimension: "temperatureDifference" } as const;
 
-export const bondingMaterialHandling = z.object({
+const resistances = {
   vacuum: resistance,
   plasma: resistance,
   solvent: resistance,
@@ -48,6 +48,13 @@ export const bondingMaterialHandling = z.object({
   base: resistance,
   ultraviolet: resistance,
   attackedBy: z.array(z.enum(SOLVENT_FAMILIES, "Choose from the list.")).max(SOLVENT_FAMILIES.length),
+};
+
+export const tapeHandling = z.object({ ...resistances, releasesInLight: yesOrNo });
+export type TapeHandlingValues = z.output<typeof tapeHandling>;
+
+export const bondingMaterialHandling = z.object({
+  ...resistances,
   remover: optionalChoice(SOLVENT_FAMILIES),
   vacuumTemperatureLimit: optionalMeasured({ ...temperature, label: "temperature limit in vacuum" }),
   weightLoss: optionalMeasured({ ...RULES.share, label: "weight loss" }),

@@ -3,6 +3,7 @@ import type { CarrierValues } from "./carrier.ts";
 import type { EquipmentValues } from "./equipment.ts";
 import type { FilmValues } from "./film.ts";
 import type { SiliconValues } from "./silicon.ts";
+import type { TapeValues } from "./tape.ts";
 
 interface Identified {
   id: string;
@@ -14,6 +15,7 @@ export interface LibraryRecords {
   silicon: SiliconValues & Identified;
   carrier: CarrierValues & Identified;
   bondingMaterial: BondingMaterialValues & Identified;
+  tape: TapeValues & Identified;
   equipment: EquipmentValues & Identified;
 }
 export type LibraryKey = keyof LibraryRecords;

@@ -67,6 +67,16 @@ export const RULES = {
     dimension: "fraction",
     range: { least: 1e-4, most: 1, words: "0.01 % to 100 %" },
   },
+  lineWidth: {
+    label: "width of the lines",
+    dimension: "length",
+    range: { least: 1e-8, most: 0.05, words: "10 nm to 50 mm" },
+  },
+  lineDirection: {
+    label: "direction of the lines",
+    dimension: "angle",
+    range: { least: -Math.PI, most: Math.PI, words: "−180° to 180°" },
+  },
   share: { label: "share", dimension: "fraction", range: { least: 0, most: 1, words: "0 to 100 %" } },
   holdTime: { label: "time at peak", dimension: "time", range: { least: 0, most: 2_592_000, words: "0 to 30 days" } },
   featureHeight: {
@@ -78,6 +88,11 @@ export const RULES = {
     label: "embedding layer of the tape",
     dimension: "length",
     range: { least: 0, most: 2e-3, words: "0 to 2 mm" },
+  },
+  tapeThickness: {
+    label: "thickness of the tape",
+    dimension: "length",
+    range: { least: 1e-6, most: 3e-3, words: "1 µm to 3 mm" },
   },
   peelForce: {
     label: "peel force",

@@ -44,3 +44,12 @@ export interface FlowTemplateDetail {
   stamp: RecordStamp;
   mayEdit: boolean;
 }
+
+/** What the page shows that keeps a flow as a template. */
+export interface KeepFlowPage {
+  flow: { id: string; name: string; steps: number };
+  /** name that a new template would get */
+  newName: string;
+  /** whose place the flow may take */
+  templates: { id: string; name: string }[];
+}

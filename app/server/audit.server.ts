@@ -31,6 +31,7 @@ const SUBJECTS: Record<string, string> = {
   Carrier: "carrier",
   CarrierUnit: "carrier piece",
   BondingMaterial: "bonding material",
+  Tape: "tape",
   Equipment: "equipment",
   SiteLimit: "limit",
   Stack: "stack",

@@ -48,6 +48,10 @@ export function answerEstimate(request: EstimateRequest, limits: SiteLimits): Es
       shape: {
         regime: shape.regime,
         bow_m: standardBow(shape.bowMajor),
+        across: estimate.unequal && {
+          bow_m: standardBow(shape.bowMinor),
+          axis_rad: axisOf(estimate.unequal.principal.angle + shape.majorAngle),
+        },
         warp_m: shape.warp,
         roll_radius_m: shape.rollRadius,
         stability_ratio: shape.stabilityRatio,
@@ -65,6 +69,9 @@ export function answerEstimate(request: EstimateRequest, limits: SiteLimits): Es
     throw error;
   }
 }
+
+/** The angle of an axis, which has no head, above −π/2 and up to π/2. */
+const axisOf = (angle: number) => angle - Math.PI * Math.ceil(angle / Math.PI - 0.5);
 
 /** The answer where nobody could do anything about a refusal, as in a list: null then. */
 export function answerOrNull(request: EstimateRequest, limits: SiteLimits): EstimateAnswer | null {
@@ -111,6 +118,8 @@ const FILM_FIELDS: Record<string, string> = {
   cte: "cte_per_K",
   referenceTemperature: "reference_temperature_K",
   coverage: "coverage",
+  lineWidth: "lines/width_m",
+  direction: "lines/direction_rad",
 };
 
 /** Other inputs that the engine may refuse; what is not listed concerns the films together. */

@@ -7,6 +7,8 @@ import { Stack } from "#app/db/entities/stack.ts";
 import type { Measured } from "#app/engine/measured.ts";
 import type { Side } from "#app/engine/vocabulary.ts";
 import { PAGE_SIZE, type ListPage, type ListParams } from "#app/lib/list-params.ts";
+import type { CutFilm } from "#app/lib/film-cut.ts";
+import { coverRequest } from "#app/lib/stack-of-request.ts";
 import { turnFront } from "#app/lib/stack-order.ts";
 import { mayInProgram, programsWhere, type ProgramPermission } from "#app/policies/permissions.ts";
 import type { EstimateRequest } from "#app/schemas/estimate.ts";
@@ -25,7 +27,7 @@ import { idFrom } from "./uuid.server.ts";
 
 export const STACK_SORTS = ["updated", "name", "program", "thickness"] as const;
 
-export interface StackLayerDetail {
+export interface StackLayerDetail extends Required<CutFilm> {
   side: Side;
   filmId: string;
   filmName: string;
@@ -38,7 +40,6 @@ export interface StackLayerDetail {
   youngsModulus: number;
   poissonsRatio: number;
   expansion: number;
-  coverage: number;
 }
 
 export interface StackDetail {
@@ -67,6 +68,7 @@ function layerDetail(layer: StackLayer): StackLayerDetail {
     poissonsRatio: film.poissonsRatio.value,
     expansion: film.expansion.value,
     coverage: layer.coverage,
+    lines: layer.lines ?? null,
   };
 }
 
@@ -86,7 +88,9 @@ function requestOf({ silicon, siliconThickness, layers }: StackDetail): Estimate
       youngs_modulus_Pa: layer.youngsModulus,
       poissons_ratio: layer.poissonsRatio,
       cte_per_K: layer.expansion,
-      coverage: layer.coverage,
+      ...coverRequest(layer),
+      thickness_tolerance_m: layer.thickness.tolerance ?? undefined,
+      stress_tolerance_Pa: layer.stress.tolerance ?? undefined,
     })),
   };
 }
@@ -264,7 +268,7 @@ async function replaceLayers(em: EntityManager, stack: Stack, layers: StackValue
   const known = new Map(films.map((film) => [film.id, film]));
   for (const old of await em.find(StackLayer, { stack: stack.id })) em.remove(old);
   const next: Record<Side, number> = { front: 0, back: 0 };
-  for (const { side, film: filmId, thickness, stress, coverage } of turnFront(layers)) {
+  for (const { side, film: filmId, thickness, stress, coverage, lines } of turnFront(layers)) {
     const film = known.get(filmId);
     if (!film) throw notFound("film");
     em.create(StackLayer, {
@@ -277,6 +281,7 @@ async function replaceLayers(em: EntityManager, stack: Stack, layers: StackValue
       thickness,
       stress,
       coverage,
+      lines,
     });
   }
 }

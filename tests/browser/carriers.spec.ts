@@ -1,7 +1,7 @@
 import type { Locator, Page } from "@playwright/test";
 import { expect, expectNoAxeFindings, signIn, test } from "./support.ts";
 
-const LISTS = ["carriers", "bonding-materials", "silicon", "tools"];
+const LISTS = ["carriers", "bonding-materials", "tapes", "silicon", "tools"];
 
 /** The fields of one measured property of a form. */
 const property = (page: Page, name: string | RegExp): Locator => page.getByRole("group", { name });
@@ -22,8 +22,15 @@ test("the place opens on carriers and leads to every kind, in the order of its r
   await page.getByRole("navigation", { name: "Places" }).getByRole("link", { name: "Carriers & bonds" }).click();
   await expect(page).toHaveURL(/\/carriers\/carriers$/);
   const row = page.getByRole("navigation", { name: "Carriers and bonds" });
-  await expect(row.getByRole("link")).toHaveText(["Carriers", "Bonding materials", "Silicon", "Tools", "Limits"]);
-  for (const name of ["Bonding materials", "Silicon", "Tools", "Limits"]) {
+  await expect(row.getByRole("link")).toHaveText([
+    "Carriers",
+    "Bonding materials",
+    "Tapes",
+    "Silicon",
+    "Tools",
+    "Limits",
+  ]);
+  for (const name of ["Bonding materials", "Tapes", "Silicon", "Tools", "Limits"]) {
     await row.getByRole("link", { name }).click();
     await expect(page.getByRole("heading", { level: 1 })).toHaveText(name);
     await expect(row.getByRole("link", { name })).toHaveAttribute("aria-current", "page");
@@ -62,6 +69,45 @@ test("a carrier is judged by the bow of the pair that it makes", async ({ page }
   await page.getByRole("button", { name: "Compute" }).click();
   await expect(page.getByText("parsecs is not a unit of length")).toBeVisible();
   await expect(page.getByLabel("Silicon left")).toHaveValue("12 parsecs");
+});
+
+test.describe("a process owner", () => {
+  test.use({ refusals: true });
+  test.beforeEach(async ({ page }) => signIn(page, "process owner"));
+
+  test("types a carrier's expansion as a curve; what is wrong is told by row", async ({ page }) => {
+    await openRecord(page, "carriers", "Glass carrier 7.2 ppm");
+    await page.getByRole("link", { name: "Change" }).click();
+    const rows = page.getByLabel("Degrees C and ppm/K, one pair on each line");
+    await rows.fill("20; 7.0\n100; 12 parsecs\n90; 7.3");
+    await page.locator("[name='expansionCurve.source']").selectOption("Supplier");
+    await page.getByRole("button", { name: "Save carrier" }).click();
+    await expect(page.getByText(/Row 2: .*parsecs is not a unit/)).toBeVisible();
+    await expect(rows).toHaveValue("20; 7.0\n100; 12 parsecs\n90; 7.3");
+    await rows.fill("20; 7.0\n100; 7.2\n300; 7.6");
+    await page.getByRole("button", { name: "Save carrier" }).click();
+    const curve = page.getByRole("region", { name: "Expansion over temperature", exact: true });
+    await expect(curve).toContainText("3 points");
+    await expect(curve.getByRole("table")).toContainText("7.6");
+    await expect(curve).toContainText("the whole curve is moved onto");
+    await expectNoAxeFindings(page);
+  });
+
+  test("adds a tape, which needs no more than a name and a purpose", async ({ page }) => {
+    const name = `Trial tape ${Date.now().toString(36)}`;
+    await page.goto("/carriers/tapes/new");
+    await page.getByLabel("Name").fill(name);
+    await fillProperty(page, "Highest temperature it may see", "12 parsecs", "Supplier");
+    await page.getByRole("button", { name: "Save tape" }).click();
+    await expect(page.getByText("Choose what it is for.")).toBeVisible();
+    await expect(page.getByText("parsecs is not a unit of temperature").first()).toBeVisible();
+    await page.getByLabel("What it is for").selectOption("Dicing tape");
+    await fillProperty(page, "Highest temperature it may see", "90 °C", "Supplier");
+    await page.getByRole("button", { name: "Save tape" }).click();
+    await expect(page.getByRole("heading", { level: 1 })).toHaveText(name);
+    await expect(page.getByText(/Dicing tape, to 90\s°C\. It does not go into vacuum/)).toBeVisible();
+    await expectNoAxeFindings(page);
+  });
 });
 
 test("a limit is found by its words", async ({ page }) => {
@@ -309,10 +355,13 @@ for (const colorScheme of ["light", "dark"] as const)
   test.describe(`accessibility, ${colorScheme}`, () => {
     test.use({ colorScheme });
 
-    test("lists, records, forms and limits have no findings", async ({ page }) => {
+    test.beforeEach(async ({ page }) => {
       test.slow();
       await signIn(page, "process owner");
-      for (const list of CHECKED[colorScheme]) {
+    });
+
+    for (const list of CHECKED[colorScheme])
+      test(`the list of ${list}, a record and its form have no findings`, async ({ page }) => {
         await page.goto(`/carriers/${list}`);
         await expectNoAxeFindings(page);
         await page.locator("tbody").getByRole("link").first().click();
@@ -321,7 +370,9 @@ for (const colorScheme of ["light", "dark"] as const)
         await page.getByRole("link", { name: "Change" }).click();
         await expect(page.getByRole("button", { name: /^Save/ })).toBeVisible();
         await expectNoAxeFindings(page);
-      }
+      });
+
+    test("the limits have no findings", async ({ page }) => {
       for (const address of ["/carriers/limits", "/carriers/limits?rule=1"]) {
         await page.goto(address);
         await expectNoAxeFindings(page);

@@ -42,6 +42,7 @@ const DOORS: Record<string, string> = {
   "/flows/library/steps/new": "302 403 403 200 200 403 403",
   "/flows/library/steps/:templateId": "302 403 200 200 200 200 200",
   "/flows/:flowId/edit": "302 404 403 200 200 403 404",
+  "/flows/:flowId/keep": "302 404 403 200 200 403 404",
   "/flows/:flowId/steps/new": "302 404 403 200 200 403 404",
   "/flows/:flowId/steps/:stepId": "302 404 200 200 200 200 404",
   "/assessments/:assessmentId": "302 404 200 200 200 200 404",

@@ -115,6 +115,40 @@ test.describe("an engineer", () => {
     await expect(steps(page).locator("tbody tr[id]")).toHaveCount(20);
   });
 
+  test("keeps a flow in the place of a template, asked once more before", async ({ page }) => {
+    const path = await ownFlow(page);
+    await page.getByRole("link", { name: "Keep as template" }).click();
+    await expect(page.getByText("Everybody on the staff of the site will see this template")).toBeVisible();
+    await expectNoAxeFindings(page);
+    await press(page, "Keep");
+    await expect(page).toHaveURL(/\/flows\/library\/flows\//);
+    const template = new URL(page.url()).pathname;
+    const name = await page.getByRole("heading", { level: 1 }).innerText();
+    await expect(page.getByRole("link", { name: "make a flow from it" })).toBeVisible();
+    await page.goto(`${path}/keep`);
+    await page.getByLabel("Keep it as").selectOption({ label: `In place of ‘${name}’` });
+    await press(page, "Keep");
+    await expect(page.getByRole("alert")).toContainText(`Replace the steps of ‘${name}’`);
+    await press(page, "Replace its steps");
+    await expect(page).toHaveURL(new RegExp(`${template}$`));
+    await page.getByText("Remove this template").click();
+    await press(page, "Remove it");
+    await expect(page).toHaveURL(/\/flows\/library\/flows$/);
+  });
+
+  test("takes a tape of the library, what the step states of it counting before", async ({ page }) => {
+    await ownFlow(page);
+    await page.getByRole("link", { name: /^Mount on film frame in line/ }).click();
+    const tape = page.getByLabel("Tape of the library");
+    await expect(tape.locator("option:checked")).toHaveText("Dicing tape A");
+    await tape.selectOption({ label: "Dicing tape for heat and vacuum" });
+    await expect(page.getByText("Dicing tape for heat and vacuum brings its own values.")).toBeVisible();
+    await page.getByRole("group", { name: "Highest temperature of the tape" }).getByLabel("Value").fill("50 °C");
+    await press(page, "Save step");
+    await press(page, "Assess");
+    await expect(page.getByText(/Dicing tape for heat and vacuum takes 50\s°C/).first()).toBeVisible();
+  });
+
   test("keeps a step in the library, with what the handling rules ask, and takes it out again", async ({ page }) => {
     await ownFlow(page);
     await page.getByRole("link", { name: /^Laminate bump-embedding/ }).click();

@@ -44,7 +44,7 @@ test.describe("an engineer", () => {
     await assess(page);
     await page.goto(path);
     await expect(answer).toContainText("Do not run");
-    await expect(page.getByRole("region", { name: "Earlier assessments" })).toContainText("Assessment 1");
+    await expect(page.getByRole("region", { name: "Earlier assessments" })).toContainText("Assessment A");
     await expect(page.getByText("It has been assessed, so it is kept")).toBeVisible();
   });
 

@@ -16,10 +16,12 @@ const save = (page: Page) => page.getByRole("button", { name: "Save stack" });
 const plain = async (locator: Locator) => (await locator.innerText()).replaceAll("\u00A0", " ");
 
 /** Adds a film at the top of the device side and fills it in. */
-async function addFilm(page: Page, film: string, thickness: string, coverage = "100 %") {
+async function addFilm(page: Page, film: string, thickness: string, coverage?: string) {
   await page.getByRole("button", { name: "Add a film on top" }).click();
   await field(page, "layers[0].film").selectOption({ label: film });
   await field(page, "layers[0].thickness.value").fill(thickness);
+  if (coverage === undefined) return;
+  await field(page, "layers[0].cut").selectOption({ label: "Patterned, both directions alike" });
   await field(page, "layers[0].coverage").fill(coverage);
 }
 
@@ -70,6 +72,29 @@ test.describe("an engineer", () => {
     const row = page.getByRole("row", { name });
     await expect(row).toContainText("Tern");
     await expect(row).toContainText("200");
+  });
+
+  test("cuts a film in lines, whose direction the answer, the reading and the workings tell", async ({ page }) => {
+    await makeStack(page, "lines");
+    await field(page, "siliconThickness.value").fill("600 um");
+    await field(page, "layers[0].cut").selectOption({ label: "Patterned in lines" });
+    const answer = answerOf(page);
+    await expect(answer.getByRole("status")).toContainText("waiting for");
+    await field(page, "layers[0].lineWidth").fill("-3 um");
+    await expect(page.getByText("is outside 10 nm to 50 mm")).toBeVisible();
+    await field(page, "layers[0].lineWidth").fill("5 um");
+    await field(page, "layers[0].lineDirection").fill("90 deg");
+    await expect(answer).toContainText(/across the notch axis, .* across that/);
+    await save(page).click();
+    await expect(page).toHaveURL(UUID);
+    await expect(field(page, "layers[0].lineDirection")).toHaveValue("90°");
+    await expect(page.getByText("lines across the notch axis")).toBeVisible();
+    await page.getByText("Film forces", { exact: true }).click();
+    await expect(page.getByText("Practical interpolation between exact limits.").first()).toBeVisible();
+    await expectNoAxeFindings(page);
+    await field(page, "layers[0].cut").selectOption({ label: "Whole film" });
+    await expect(field(page, "layers[0].lineWidth")).toHaveCount(0);
+    await expect(answer).not.toContainText("notch axis");
   });
 
   test("draws wafers within the tolerances for the share beyond a warp", async ({ page }) => {

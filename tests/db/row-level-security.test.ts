@@ -22,6 +22,7 @@ const SITE_TABLES = [
   "carrier",
   "carrier_unit",
   "bonding_material",
+  "tape",
   "equipment",
   "site_limit",
   "step_template",

@@ -85,7 +85,15 @@ test("somebody who was slower is told what was done, and may still put their ste
   if (!step) throw new Error("no second step");
   await changeStep(owner, { flowId, version, stepId: step.id }, { kind: "remove" });
   const { id: _id, films: _films, equipment: _tool, ...typed } = step;
-  const values = { ...typed, title: "Mine", equipment: null, carrier: null, bondingMaterial: null, films: [] };
+  const values = {
+    ...typed,
+    title: "Mine",
+    equipment: null,
+    carrier: null,
+    bondingMaterial: null,
+    tape: null,
+    films: [],
+  };
   const place = { flowId, stepId: step.id, position: 0 };
   const refused = await saveStep(engineer, { ...place, version }, values);
   expect(refused).toMatchObject({

@@ -118,6 +118,7 @@ const firstOf = (slug: KindSlug) => idOf(`select id from "${TABLES[slug]}" order
 const TABLES: Record<KindSlug, string> = {
   carriers: "carrier",
   "bonding-materials": "bonding_material",
+  tapes: "tape",
   silicon: "silicon",
   tools: "equipment",
 };

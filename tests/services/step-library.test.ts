@@ -10,6 +10,7 @@ const database = useDatabase({ demo: true });
 const services = async () => ({
   ...(await import("#app/services/flows/step-library.server.ts")),
   ...(await import("#app/services/flows/flow-templates.server.ts")),
+  ...(await import("#app/services/flows/keep-flow.server.ts")),
   ...(await import("#app/services/flows/new-flow-page.server.ts")),
   ...(await import("#app/services/flows/flows.server.ts")),
 });
@@ -94,6 +95,34 @@ test("an engineer keeps, changes and removes a step; a second of that name is re
   expect((await getStepTemplate(scope, saved.id)).step.peakTemperature).toBe(400);
   await removeStepTemplate(scope, saved.id);
   await expect(getStepTemplate(scope, saved.id)).rejects.toMatchObject({ init: { status: 404 } });
+});
+
+test("a flow takes the place of a template: its name and note stay, its steps are the flow's", async () => {
+  const { keepFlow, keepFlowPage, replaceFlowTemplate, getFlowTemplate, removeFlowTemplate } = await services();
+  const engineer = await scopeOfPerson(database, "engineer");
+  const flows = await asOwner<{ id: string; name: string; steps: string }>(
+    database,
+    "select flow.id, flow.name, (select count(*) from flow_step where flow_id = flow.id) as steps from flow order by name",
+  );
+  const [one, other] = [flows[0], flows.at(-1)];
+  if (!one || !other || one.steps === other.steps) throw new Error("the demo has flows of different length");
+  const templateId = await keepFlow(engineer, one.id);
+  const before = await getFlowTemplate(engineer, templateId);
+  expect(before.rows).toHaveLength(Number(one.steps));
+  expect(await keepFlowPage(engineer, other.id)).toMatchObject({
+    flow: { id: other.id, steps: Number(other.steps) },
+    templates: expect.arrayContaining([{ id: templateId, name: before.name }]),
+  });
+  await replaceFlowTemplate(engineer, other.id, templateId);
+  const after = await getFlowTemplate(engineer, templateId);
+  expect(after).toMatchObject({ name: before.name, note: before.note });
+  expect(after.rows).toHaveLength(Number(other.steps));
+  const technician = await scopeOfPerson(database, "technician");
+  await expect(keepFlowPage(technician, one.id)).rejects.toMatchObject({ init: { status: 403 } });
+  await expect(replaceFlowTemplate(technician, one.id, templateId)).rejects.toMatchObject({ init: { status: 403 } });
+  const guest = await scopeOfPerson(database, "guest");
+  await expect(keepFlowPage(guest, one.id)).rejects.toMatchObject({ init: { status: 404 } });
+  await removeFlowTemplate(engineer, templateId);
 });
 
 test("a technician reads the library and changes nothing; a guest does not see it", async () => {

@@ -20,7 +20,7 @@ import {
   PEEL_PROPERTIES as PEEL,
 } from "./bonding-material-properties.ts";
 import { FormGroup } from "./FormGroup.tsx";
-import type { ResistanceName } from "./resistance-words.ts";
+import { resistanceTexts, type ResistanceName } from "./resistance-words.ts";
 import { ResistanceFields, type ResistanceText } from "./ResistanceFields.tsx";
 
 type BondingMaterial = LibraryRecords["bondingMaterial"];
@@ -54,18 +54,9 @@ const folded = (names: readonly (keyof BondingMaterial["handling"])[], record: B
 });
 
 function handlingTexts(handling: BondingMaterial["handling"]): BondingMaterialFormValues["handling"] {
-  const resistance = (name: ResistanceName): ResistanceText => ({
-    word: handling[name]?.word ?? "",
-    longest: quantityText(handling[name]?.longest, "time", "min"),
-  });
   return {
     ...measuredTexts(handling, { ...HEAT, ...PEEL }),
-    vacuum: resistance("vacuum"),
-    plasma: resistance("plasma"),
-    solvent: resistance("solvent"),
-    acid: resistance("acid"),
-    base: resistance("base"),
-    ultraviolet: resistance("ultraviolet"),
+    ...resistanceTexts(handling),
     attackedBy: handling.attackedBy,
     releaseLight: handling.releaseLight ?? "",
     remover: handling.remover ?? "",
@@ -153,7 +144,11 @@ export function BondingMaterialForm({ record, ...rest }: RecordFormProps<Bonding
         <PropertyField field={fields.expansionAbove} of={P.expansionAbove} />
       </FormPart>
       <FormPart title="In vacuum, chemicals and light">
-        <ResistanceFields handling={handling} says={fields} />
+        <ResistanceFields
+          handling={handling}
+          says={fields}
+          without="Without them a step that exposes the bond cannot be judged."
+        />
         <OptionalFields label="In vacuum and heat" {...folded(HEAT_FIELDS, record)} lastResult={rest.lastResult}>
           <PropertyField field={handling.vacuumTemperatureLimit} of={HEAT.vacuumTemperatureLimit} />
           <PropertyField field={handling.weightLoss} of={HEAT.weightLoss} />

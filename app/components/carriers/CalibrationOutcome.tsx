@@ -81,6 +81,7 @@ function Values({ values }: { values: FittedValue[] }) {
   );
 }
 
+/** On a phone a step has a line of its own above its figures: beside them there is no room for both. */
 const HEADS = ["Measured", "As stated", "Fitted", "Left over", "Uncertainty"] as const;
 
 /** What was computed before the fit is left out on a phone. */
@@ -94,7 +95,9 @@ function Residuals({ rows }: { rows: ResidualRow[] }) {
         <caption className="sr-only">{name}, µm</caption>
         <thead>
           <tr>
-            <th scope="col">After step</th>
+            <th scope="col" className="max-tablet:hidden">
+              After step
+            </th>
             {HEADS.map((head) => (
               <th key={head} scope="col" className={figureClass(head)}>
                 {head} <span className="block font-normal text-quiet">µm</span>
@@ -102,10 +105,15 @@ function Residuals({ rows }: { rows: ResidualRow[] }) {
             ))}
           </tr>
         </thead>
-        <tbody>
-          {rows.map(({ step, title, measured, stated, fitted, residual, uncertainty }, index) => (
-            <tr key={index}>
-              <th scope="row" className="font-normal">
+        {rows.map(({ step, title, measured, stated, fitted, residual, uncertainty }, index) => (
+          <tbody key={index}>
+            <tr className="tablet:hidden">
+              <th scope="rowgroup" colSpan={HEADS.length - 1} className="pb-0 font-normal">
+                After step {step}, {title}
+              </th>
+            </tr>
+            <tr className="max-tablet:[&>td]:border-t-0">
+              <th scope="row" className="font-normal max-tablet:hidden">
                 {step}, {title}
               </th>
               {[measured, stated, fitted, residual, uncertainty].map((figure, column) => (
@@ -114,8 +122,8 @@ function Residuals({ rows }: { rows: ResidualRow[] }) {
                 </td>
               ))}
             </tr>
-          ))}
-        </tbody>
+          </tbody>
+        ))}
       </table>
     </div>
   );

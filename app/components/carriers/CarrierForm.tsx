@@ -13,6 +13,7 @@ import { CARRIER_MATERIALS } from "#app/engine/flow/model.ts";
 import { quantityText, yesOrNoText } from "#app/lib/form-values.ts";
 import type { LibraryRecords } from "#app/schemas/library-records.ts";
 import { CARRIER_PROPERTIES as P } from "./carrier-properties.ts";
+import { ExpansionCurveFields, expansionCurveText, type ExpansionCurveText } from "./ExpansionCurveFields.tsx";
 import { FormGroup } from "./FormGroup.tsx";
 
 type Carrier = LibraryRecords["carrier"];
@@ -24,6 +25,7 @@ type CarrierFormValues = {
   expansionRange: string;
   meanExpansionFrom: string;
   meanExpansionTo: string;
+  expansionCurve: ExpansionCurveText;
   passesUltraviolet: boolean;
   passesInfrared: boolean;
   perforated: boolean;
@@ -39,6 +41,7 @@ const formValues = (carrier: Carrier) => ({
   expansionRange: carrier.expansion === null ? "" : carrier.expansionRange,
   meanExpansionFrom: quantityText(carrier.meanExpansionFrom, "temperature", "°C"),
   meanExpansionTo: quantityText(carrier.meanExpansionTo, "temperature", "°C"),
+  expansionCurve: expansionCurveText(carrier.expansionCurve),
   reuseLimit: String(carrier.reuseLimit),
   handling: {
     metalInLight: yesOrNoText(carrier.handling.metalInLight),
@@ -88,6 +91,7 @@ export function CarrierForm({ record, ...rest }: RecordFormProps<Carrier>) {
           />
         </div>
       </FormGroup>
+      <ExpansionCurveFields field={fields.expansionCurve} />
       <PropertyField field={fields.density} of={P.density} />
       <PropertyField field={fields.thicknessVariation} of={P.thicknessVariation} />
       <PropertyField field={fields.temperatureLimit} of={P.temperatureLimit} />

@@ -8,11 +8,13 @@ import type { KindPageData, KindRecord, KindRecordData, SiteFacts } from "#app/l
 import { KindFigure } from "./KindFigure.tsx";
 import { pairCut } from "./pair-cut.ts";
 import { siliconView } from "./silicon-view.tsx";
+import { tapeView } from "./tape-view.tsx";
 import { toolView } from "./tool-view.tsx";
 
 const VIEWS: { [Slug in KindSlug]: (record: KindRecord<Slug>, site: SiteFacts) => RecordView } = {
   carriers: carrierView,
   "bonding-materials": bondingMaterialView,
+  tapes: tapeView,
   silicon: siliconView,
   tools: toolView,
 };

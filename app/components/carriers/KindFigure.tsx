@@ -1,6 +1,7 @@
 import { Link } from "react-router";
 import { softensAt } from "#app/lib/adhesive-bands.ts";
 import type { KindPageData } from "#app/lib/kind-data.ts";
+import { ExpansionCurveSection } from "./ExpansionCurveSection.tsx";
 import { PairTrialSection } from "./PairTrialSection.tsx";
 import { TemperatureBand } from "./TemperatureBand.tsx";
 
@@ -8,7 +9,14 @@ import { TemperatureBand } from "./TemperatureBand.tsx";
 export function KindFigure(data: KindPageData) {
   switch (data.slug) {
     case "carriers":
-      return data.trial && <PairTrialSection trial={data.trial} />;
+      return (
+        <>
+          {data.trial && <PairTrialSection trial={data.trial} />}
+          {data.record.expansionCurve && (
+            <ExpansionCurveSection curve={data.record.expansionCurve} expansion={data.record.expansion} />
+          )}
+        </>
+      );
     case "bonding-materials": {
       const { flows, temperatureLimit, bondTemperature, releaseTemperature } = data.record;
       return (
@@ -33,6 +41,7 @@ export function KindFigure(data: KindPageData) {
         </>
       );
     }
+    case "tapes":
     case "silicon":
     case "tools":
       return null;

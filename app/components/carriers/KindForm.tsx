@@ -5,11 +5,13 @@ import type { KindSlug } from "#app/lib/library-kinds.ts";
 import { BondingMaterialForm } from "./BondingMaterialForm.tsx";
 import { CarrierForm } from "./CarrierForm.tsx";
 import { SiliconForm } from "./SiliconForm.tsx";
+import { TapeForm } from "./TapeForm.tsx";
 import { ToolForm } from "./ToolForm.tsx";
 
 const FORMS: { [Slug in KindSlug]: FunctionComponent<RecordFormProps<KindRecord<Slug>>> } = {
   carriers: CarrierForm,
   "bonding-materials": BondingMaterialForm,
+  tapes: TapeForm,
   silicon: SiliconForm,
   tools: ToolForm,
 };

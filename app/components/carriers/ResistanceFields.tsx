@@ -17,7 +17,9 @@ interface Props {
     attackedBy: FieldMetadata<string[] | undefined>;
   };
   /** the words of the data sheet, where there is a field for them */
-  says: Record<"vacuum" | "solvent" | "acid" | "base", FieldMetadata<string | undefined>>;
+  says?: Record<"vacuum" | "solvent" | "acid" | "base", FieldMetadata<string | undefined>>;
+  /** what follows where nothing is given, in one sentence */
+  without: string;
 }
 
 const WORDS = [
@@ -26,13 +28,11 @@ const WORDS = [
   { value: "unknown", label: "Not known" },
 ];
 
-/** What a bonding material does in vacuum, chemicals and light: the word that the rules take, and what its data sheet says. */
-export function ResistanceFields({ handling, says }: Props) {
+/** What a bonding material or a tape does in vacuum, chemicals and light: the word that the rules take, and what its data sheet says. */
+export function ResistanceFields({ handling, says, without }: Props) {
   return (
     <FormGroup label="What it stands">
-      <p className="mb-3 max-w-[60em] text-quiet">
-        The handling rules go by the word and the time. Without them a step that exposes the bond cannot be judged.
-      </p>
+      <p className="mb-3 max-w-[60em] text-quiet">The handling rules go by the word and the time. {without}</p>
       <div className="space-y-3 tablet:space-y-0">
         {RESISTANCES.map(({ name, label, says: words }) => {
           const { word, longest } = handling[name].getFieldset();
@@ -45,7 +45,7 @@ export function ResistanceFields({ handling, says }: Props) {
             >
               <ChoiceField field={word} label={label} choices={WORDS} blank="Not given" />
               <QuantityField field={longest} label="For at most" dimension="time" example="30 min" />
-              {words && (
+              {words && says && (
                 <LineField
                   field={says[words]}
                   label="In the words of its data sheet"

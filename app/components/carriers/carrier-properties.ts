@@ -11,8 +11,8 @@ export const CARRIER_PROPERTIES = {
     dimension: "expansion",
     unit: "ppm/K",
     example: "3.0 ppm/K",
-    hint: "Blank for silicon: its own curve",
-    missing: "silicon’s own curve",
+    hint: "Blank for silicon, its own curve, and where a curve stands below",
+    missing: "by its curve",
   },
   density: { label: "Density", dimension: "density", unit: "kg/m³", example: "2450 kg/m3" },
   thicknessVariation: {

@@ -5,6 +5,7 @@ import type { ListView } from "#app/components/library/LibraryList.tsx";
 import { propertyRows } from "#app/components/library/property.ts";
 import { CARRIER_MATERIALS } from "#app/engine/flow/model.ts";
 import { formatQuantity } from "#app/engine/units/format.ts";
+import { meanOfCurve } from "#app/lib/expansion-rows.ts";
 import { formatBare, formatMeasured } from "#app/lib/format-measured.ts";
 import { KINDS, kindPath } from "#app/lib/library-kinds.ts";
 import type { LibraryRecords } from "#app/schemas/library-records.ts";
@@ -20,6 +21,10 @@ function passes({ passesUltraviolet, passesInfrared }: Carrier): string {
 }
 
 const yesOrNo = (answer: boolean | null) => (answer === null ? "not given" : answer ? "yes" : "no");
+
+/** Silicon's own curve is not stated with the carrier. */
+const expansionOver = ({ expansion, expansionCurve, expansionRange }: Carrier) =>
+  expansion || expansionCurve ? expansionRange : "silicon’s own curve";
 
 const times = (count: number) => (count === 1 ? "once" : `${count} times`);
 
@@ -63,22 +68,25 @@ export const CARRIER_LIST: ListView<Carrier> = {
       unit: "ppm/K",
       numeric: true,
       sortable: true,
-      cell: ({ expansion, expansionRange }) =>
-        expansion ? (
+      cell: ({ expansion, expansionCurve, expansionRange }) => {
+        const value = expansion ?? (expansionCurve && meanOfCurve(expansionCurve));
+        if (!value) return "silicon’s own";
+        return (
           <>
-            {formatMeasured(expansion, "expansion", { unit: "ppm/K", bare: true })}
+            {formatMeasured(value, "expansion", { unit: "ppm/K", bare: true })}
             <SecondLine>{expansionRange}</SecondLine>
           </>
-        ) : (
-          "silicon’s own"
-        ),
+        );
+      },
     },
     {
       key: "source",
       head: "Source of expansion",
       wide: true,
       // Silicon's own curve is a published one.
-      cell: ({ expansion }) => <SourceMark kind={expansion?.source ?? "handbook"} />,
+      cell: ({ expansion, expansionCurve }) => (
+        <SourceMark kind={expansion?.source ?? expansionCurve?.source ?? "handbook"} />
+      ),
     },
     {
       key: "variation",
@@ -128,7 +136,7 @@ export function carrierView(carrier: Carrier): RecordView {
     facts: [
       { label: "Material", value: carrier.material },
       { label: "Diameter", value: formatQuantity(carrier.diameter, "length", { unit: "mm" }) },
-      { label: "Expansion over", value: carrier.expansion ? carrier.expansionRange : "silicon’s own curve" },
+      { label: "Expansion over", value: expansionOver(carrier) },
       { label: "Passes light", value: passes(carrier) },
       { label: "Perforated", value: carrier.perforated ? "yes, for solvent" : "no" },
       { label: "May be used", value: times(carrier.reuseLimit) },

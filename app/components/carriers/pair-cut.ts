@@ -1,6 +1,7 @@
 import { chooseExaggeration } from "#app/components/drawings/choose-exaggeration.ts";
 import type { CutProps } from "#app/components/drawings/Cut.tsx";
 import type { CutLayer } from "#app/components/drawings/cut-layer.ts";
+import { knownShapeWord } from "#app/engine/vocabulary.ts";
 import { formatQuantity } from "#app/engine/units/format.ts";
 import { formatMeasured } from "#app/lib/format-measured.ts";
 import type { LibraryRecords } from "#app/schemas/library-records.ts";
@@ -46,9 +47,11 @@ export function pairCut(carrier: LibraryRecords["carrier"], pair: TriedPair): Cu
       notes: [
         carrier.expansion
           ? formatMeasured(carrier.expansion, "expansion", { unit: "ppm/K" })
-          : "expands as the wafer does",
+          : carrier.expansionCurve
+            ? "expands by its curve"
+            : "expands as the wafer does",
       ],
-      assumed: carrier.expansion?.source === "assumed",
+      assumed: (carrier.expansion ?? carrier.expansionCurve)?.source === "assumed",
     },
   ];
   const exaggeration = chooseExaggeration([pair.bow], wafer.diameter);
@@ -69,7 +72,10 @@ export function pairCut(carrier: LibraryRecords["carrier"], pair: TriedPair): Cu
       holding: "carrier",
       exaggeration,
       head: "As it lies at 25 °C",
-      note: shape.kind === "rolled" ? "rolls up, ×1" : `${pair.lies}, ×${exaggeration}`,
+      note:
+        shape.kind === "rolled"
+          ? "rolls up, ×1"
+          : `${knownShapeWord(pair.lies, pair.warp, pair.uncertainty)}, ×${exaggeration}`,
     },
   };
 }

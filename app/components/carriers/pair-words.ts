@@ -1,4 +1,5 @@
 import { formatQuantity, formatWithUncertainty } from "#app/engine/units/format.ts";
+import { knownShapeWord } from "#app/engine/vocabulary.ts";
 import type { TriedPair } from "#app/lib/pair-trial.ts";
 
 const micrometres = (value: number) => formatQuantity(value, "length", { unit: "µm", significant: 3, trim: true });
@@ -20,7 +21,7 @@ function lying(pair: TriedPair): string {
     return `rolls up, radius about ${radius}, and its edges lift ${formatQuantity(warp, "length", { significant: 2 })}`;
   }
   if (lies === "flat" && warp + 2 * uncertainty < NOTHING) return `lies flat within ${micrometres(NOTHING)}`;
-  return `lies ${lies}, ${warpOf(pair)}`;
+  return `lies ${knownShapeWord(lies, warp, uncertainty)}, ${warpOf(pair)}`;
 }
 
 /** How the pair lies, in one sentence. */

@@ -1,6 +1,7 @@
 import { Link } from "react-router";
 import { FindingTag } from "#app/components/drawings/FindingTag.tsx";
 import { noBreak } from "#app/components/drawings/no-break.ts";
+import { revisionLetters } from "#app/lib/assessment-revision.ts";
 import type { FlowAssessmentRow } from "#app/schemas/flow-view.ts";
 
 /** What the newest assessment says of the flow, with the older ones beside it. The answer comes before the plan. */
@@ -12,7 +13,7 @@ export function FlowAnswer({ assessments, mayAssess }: { assessments: FlowAssess
         {newest ? (
           <>
             <FindingTag outcome={newest.outcome}>
-              assessment {newest.number}, {newest.createdAt.slice(0, 10)}
+              assessment {revisionLetters(newest.number)}, {newest.createdAt.slice(0, 10)}
             </FindingTag>
             <h2 className="mt-2 max-w-[46em] text-figure font-medium text-pretty">
               {newest.sentences.map((sentence) => (
@@ -29,7 +30,7 @@ export function FlowAnswer({ assessments, mayAssess }: { assessments: FlowAssess
             )}
             <p className="mt-3">
               <Link to={`/assessments/${newest.id}`} className="link">
-                Open assessment {newest.number}
+                Open assessment {revisionLetters(newest.number)}
               </Link>
             </p>
           </>
@@ -60,7 +61,7 @@ function OlderAssessments({ older }: { older: FlowAssessmentRow[] }) {
           <li key={id} className="border-t border-line py-2 first:border-0">
             <div className="flex flex-wrap items-center justify-between gap-x-3">
               <Link to={`/assessments/${id}`} className="link">
-                Assessment {number}
+                Assessment {revisionLetters(number)}
               </Link>
               <FindingTag outcome={outcome} />
             </div>

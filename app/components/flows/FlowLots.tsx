@@ -1,5 +1,6 @@
 import { Link } from "react-router";
 import { FindingTag } from "#app/components/drawings/FindingTag.tsx";
+import { revisionLetters } from "#app/lib/assessment-revision.ts";
 import { bowText } from "#app/lib/lot-words.ts";
 import type { FlowLotRow } from "#app/schemas/lot.ts";
 
@@ -22,7 +23,7 @@ export function FlowLots({ lots }: { lots: FlowLotRow[] }) {
               {wafers > 0 ? `${missed} of ${wafers} wafers ${missed === 1 ? "misses" : "miss"} a limit` : "mean only"}
             </span>
             <span className="text-label text-quiet">
-              bow in {bowText(bow)}, on assessment {number}, {createdAt.slice(0, 10)}, {createdBy}
+              bow in {bowText(bow)}, on assessment {revisionLetters(number)}, {createdAt.slice(0, 10)}, {createdBy}
             </span>
           </li>
         ))}

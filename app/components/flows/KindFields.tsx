@@ -48,7 +48,14 @@ export function KindFields({ fields, kind, choices }: Props) {
         />
       </KindGroup>
       <KindGroup needed={has.tape} title="Tape" className={SHOWN.tape}>
-        <TapeFields field={fields.handling} />
+        <ExplainedChoiceField
+          field={fields.tape}
+          label="Tape of the library"
+          choices={choices.tapes}
+          blank="None: as stated below"
+          hint="What is not stated below is taken from it"
+        />
+        <TapeFields field={fields.handling} chosen={chosenTape(fields.tape, choices)} />
       </KindGroup>
       <KindGroup needed={has.trim} title="Edge trim" className={SHOWN.trim}>
         <MeasuredField field={fields.trimWidth} label="Width of the trim" dimension="length" example="0.7 mm" />
@@ -97,6 +104,10 @@ export function KindFields({ fields, kind, choices }: Props) {
     </>
   );
 }
+
+/** Name of the tape that is chosen, while something is. */
+const chosenTape = (field: FieldMetadata<string>, { tapes }: StepChoices) =>
+  tapes.find(({ id }) => id === (field.value ?? field.initialValue))?.name ?? null;
 
 /**
  * Groups show by the kind that is chosen, in the style sheet, so that it works while scripts are still on their way; where there

@@ -1,8 +1,8 @@
 import type { FieldMetadata, FormMetadata } from "@conform-to/react";
 import { useRef } from "react";
 import { ChoiceField } from "#app/components/forms/ChoiceField.tsx";
+import { FilmCutFields } from "#app/components/forms/FilmCutFields.tsx";
 import { MeasuredField } from "#app/components/forms/MeasuredField.tsx";
-import { QuantityField } from "#app/components/forms/QuantityField.tsx";
 import type { ExplainedChoice } from "#app/lib/flow-step-choices.ts";
 import { ExplainedChoiceField } from "./ExplainedChoiceField.tsx";
 import { NEW_FILM, type FilmChangeValues, type StepFormValues } from "./step-form-values.ts";
@@ -73,21 +73,13 @@ function FilmLine({ line, number, films, children }: LineProps) {
   return (
     <fieldset className="group/film mt-3 border border-line p-3">
       <legend className="px-1 text-label text-quiet">Film, line {number}</legend>
-      <div className="grid gap-3 tablet:grid-cols-[10rem_9rem_minmax(0,1fr)_8rem]">
+      <div className="grid gap-3 tablet:grid-cols-[10rem_9rem_minmax(0,1fr)]">
         <ChoiceField field={parts.change} label="What happens" choices={CHANGES} />
         <ChoiceField field={parts.side} label="Side" choices={SIDES} />
         <ExplainedChoiceField field={parts.film} label="Film" choices={films} blank="Choose a film" />
-        <div className={ONLY_ADDED}>
-          <QuantityField
-            field={parts.coverage}
-            label="Area covered"
-            dimension="fraction"
-            example="35 %"
-            hint="Blank: 100 %"
-          />
-        </div>
       </div>
       <div className={`mt-3 space-y-3 ${ONLY_ADDED}`}>
+        <FilmCutFields field={line} />
         <MeasuredField field={parts.thickness} label="Film thickness" dimension="length" example="5 um" />
         <MeasuredField
           field={parts.stress}

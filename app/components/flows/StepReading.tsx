@@ -1,5 +1,6 @@
 import { ProfileDrawing } from "#app/components/drawings/ProfileDrawing.tsx";
 import { PropertyTable, type Property } from "#app/components/ui/PropertyTable.tsx";
+import { filmCutWords } from "#app/lib/film-cut.ts";
 import type { Measured } from "#app/engine/measured.ts";
 import { formatQuantity } from "#app/engine/units/format.ts";
 import { stepHandlingWords } from "#app/lib/step-handling-words.ts";
@@ -20,7 +21,7 @@ export function StepReading({ step }: { step: StepDetail }) {
     ["Carrier", step.carrier && withPieceMark(step.carrier.name, step.carrier.identity)],
     ["Bonding material", step.bondingMaterial?.name ?? null],
     ...step.films.map(filmWords),
-    ...stepHandlingWords(step.handling),
+    ...stepHandlingWords(step.handling, step.tape),
   ];
   const { profile } = step.handling;
   const properties = measuredOf(step);
@@ -42,9 +43,12 @@ export function StepReading({ step }: { step: StepDetail }) {
   );
 }
 
-function filmWords({ change, side, film, coverage }: StepDetail["films"][number]): [string, string] {
-  const share = change === "adds" && coverage < 1 ? `, ${formatQuantity(coverage, "fraction", { unit: "%" })}` : "";
-  return [`${change === "adds" ? "Adds" : "Removes"}, ${side === "front" ? "device" : "back"} side`, film.name + share];
+function filmWords({ change, side, film, coverage, lines }: StepDetail["films"][number]): [string, string] {
+  const cut = change === "adds" ? filmCutWords({ coverage, lines }) : null;
+  return [
+    `${change === "adds" ? "Adds" : "Removes"}, ${side === "front" ? "device" : "back"} side`,
+    cut ? `${film.name}, ${cut}` : film.name,
+  ];
 }
 
 function measuredOf(step: StepDetail): Property[] {

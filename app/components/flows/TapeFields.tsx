@@ -6,6 +6,8 @@ import { RESISTANCE_WORDS } from "#app/engine/flow/handling-inputs.ts";
 import { YES_OR_NO } from "./HandlingFields.tsx";
 import type { StepHandlingText } from "./step-handling-values.ts";
 
+const LIBRARYS = "Blank: the library’s";
+
 const STANDS = [
   ["tapeVacuum", "Vacuum"],
   ["tapePlasma", "Plasma"],
@@ -15,18 +17,33 @@ const STANDS = [
   ["tapeUltraviolet", "Ultraviolet light"],
 ] as const;
 
-/** The tape that a step puts the wafer on, and what it stands. */
-export function TapeFields({ field }: { field: FieldMetadata<StepHandlingText | undefined> }) {
+interface Props {
+  field: FieldMetadata<StepHandlingText | undefined>;
+  /** name of the tape of the library that is chosen; null for none */
+  chosen: string | null;
+}
+
+/** What a step itself states of the tape that it puts the wafer on: it counts before what the library says. */
+export function TapeFields({ field, chosen }: Props) {
   const parts = field.getFieldset();
   return (
     <>
+      {chosen && (
+        <p className="text-quiet">
+          {chosen} brings its own values. What is typed here counts before them, at this step alone.
+        </p>
+      )}
       <div className="grid gap-3 tablet:grid-cols-[2fr_1fr]">
-        <LineField field={parts.tapeName} label="Tape" hint="By its type, as the floor calls it" />
+        <LineField
+          field={parts.tapeName}
+          label={chosen ? "Called here" : "Tape"}
+          hint={chosen ? "Blank: as the library calls it" : "By its type, as the floor calls it"}
+        />
         <ChoiceField
           field={parts.tapeReleasesInLight}
           label="Ultraviolet light lets it go"
           choices={YES_OR_NO}
-          blank="Not given"
+          blank={chosen ? "As the library says" : "Not given"}
         />
       </div>
       <MeasuredField
@@ -35,27 +52,28 @@ export function TapeFields({ field }: { field: FieldMetadata<StepHandlingText | 
         dimension="temperature"
         toleranceDimension="temperatureDifference"
         example="80 °C"
-        hint="Blank: the site’s limit for tape"
+        hint={chosen ? LIBRARYS : "Blank: the site’s limit for tape"}
       />
       <MeasuredField
         field={parts.tapeEmbeddingDepth}
         label="Soft layer that takes up bumps"
         dimension="length"
         example="200 um"
-        hint="0 um when it has none"
+        hint={chosen ? `0 um when it has none. ${LIBRARYS}` : "0 um when it has none"}
       />
       <MeasuredField
         field={parts.tapeThicknessVariation}
         label="Thickness variation of the tape"
         dimension="length"
         example="3 um"
+        hint={chosen ? LIBRARYS : undefined}
       />
       <MeasuredField
         field={parts.tapeLongestTime}
         label="Longest time on the tape"
         dimension="time"
         example="7 d"
-        hint="Blank: the site’s red line"
+        hint={chosen ? LIBRARYS : "Blank: the site’s red line"}
       />
       <fieldset className="border-t border-line pt-3">
         <legend className="float-left mb-2 w-full font-semibold">What the tape stands</legend>
@@ -66,7 +84,7 @@ export function TapeFields({ field }: { field: FieldMetadata<StepHandlingText | 
               field={parts[name]}
               label={label}
               choices={sameWords(RESISTANCE_WORDS)}
-              blank="Not given"
+              blank={chosen ? "As the library says" : "Not given"}
             />
           ))}
         </div>

@@ -1,5 +1,6 @@
 import type { Measured } from "#app/engine/measured.ts";
 import type { Holding } from "#app/engine/vocabulary.ts";
+import { filmCutText, WHOLE, type FilmCutText } from "#app/lib/film-cut.ts";
 import { measuredText, quantityText } from "#app/lib/form-values.ts";
 import type { StepDetail } from "#app/schemas/flow-view.ts";
 import { stepHandlingText, type StepHandlingText } from "./step-handling-values.ts";
@@ -10,10 +11,9 @@ export type FilmChangeValues = {
   change: string;
   side: string;
   film: string;
-  coverage: string;
   thickness: MeasuredText;
   stress: MeasuredText;
-};
+} & FilmCutText;
 
 /** A step as the text of its form. */
 export type StepFormValues = {
@@ -31,6 +31,7 @@ export type StepFormValues = {
   bondingMaterial: string;
   bondThickness: MeasuredText;
   groundFaceForce: MeasuredText;
+  tape: string;
   films: FilmChangeValues[];
   handling: StepHandlingText;
 };
@@ -54,12 +55,13 @@ export function stepFormValues(step: StepDetail): StepFormValues {
     bondingMaterial: step.bondingMaterial?.id ?? "",
     bondThickness: length(step.bondThickness),
     groundFaceForce: measuredText(step.groundFaceForce, "forcePerLength", { unit: "N/m" }),
+    tape: step.tape?.id ?? "",
     handling: stepHandlingText(step.handling),
     films: step.films.map((film) => ({
       change: film.change,
       side: film.side,
       film: film.film.id,
-      coverage: film.change === "adds" ? quantityText(film.coverage, "fraction", "%") : "",
+      ...(film.change === "adds" ? filmCutText(film) : WHOLE),
       thickness: length(film.thickness),
       stress: measuredText(film.ownStress, "stress", { unit: "MPa" }),
     })),
@@ -72,4 +74,4 @@ export function newStepValues(planned: Holding): Partial<StepFormValues> {
 }
 
 /** A film that is about to be typed. */
-export const NEW_FILM: Partial<FilmChangeValues> = { change: "adds", side: "front", coverage: "100 %" };
+export const NEW_FILM: Partial<FilmChangeValues> = { change: "adds", side: "front", ...WHOLE };

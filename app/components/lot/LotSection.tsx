@@ -19,9 +19,9 @@ export function LotSection({ lot }: { lot: LotRecord }) {
         <p className="mt-1 max-w-[60em]">
           {noBreak(came)} Everything else is as in{" "}
           <Link to={`/assessments/${of.id}`} className="link">
-            assessment {of.number}
+            assessment {revisionLetters(of.number)}
           </Link>
-          , revision {revisionLetters(of.number)}.
+          .
         </p>
       </section>
       <LotSpread lot={lot} folded />

@@ -4,6 +4,7 @@ import { FindingTag } from "#app/components/drawings/FindingTag.tsx";
 import { noBreak } from "#app/components/drawings/no-break.ts";
 import { PageHead } from "#app/components/layout/PageHead.tsx";
 import { Notice } from "#app/components/ui/Notice.tsx";
+import { revisionLetters } from "#app/lib/assessment-revision.ts";
 import { micrometres } from "#app/lib/assessment-figure.ts";
 import type { ExpectedShare } from "#app/lib/lot-expected.ts";
 import { bowText, expectedSentences } from "#app/lib/lot-words.ts";
@@ -47,7 +48,7 @@ export function LotTryPage({ page, answer }: Props) {
         crumbs={[
           { name: "Flows", path: "/flows" },
           { name: flow.name, path: `/flows/${flow.id}` },
-          { name: `Assessment ${number}`, path: `/assessments/${id}` },
+          { name: `Assessment ${revisionLetters(number)}`, path: `/assessments/${id}` },
         ]}
         actions={trial && mayKeep ? <KeepLot typed={answer?.typed ?? {}} /> : null}
       />
@@ -97,7 +98,7 @@ export function LotTryPage({ page, answer }: Props) {
 function AsAssessed({ before: { outcome, where, sentences }, number }: { before: AnswerSummary; number: number }) {
   return (
     <section className="p-4 tablet:p-6" aria-label="As assessed">
-      <p className="text-quiet">Assessment {number}, for what its flow expects to come in</p>
+      <p className="text-quiet">Assessment {revisionLetters(number)}, for what its flow expects to come in</p>
       <p className="mt-2">
         <FindingTag outcome={outcome}>{where}</FindingTag>
       </p>

@@ -39,7 +39,7 @@ export const CONVENTIONS: readonly Term[] = [
   {
     term: "Shape as loaded",
     meaning:
-      "Words such as edges up and edges down are as the wafer lies on that tool. From bond to debond the pair lies carrier down: back side up when it is bonded by its device side, device side up when by its back side; between two carriers it lies on the one that was bonded last. The standard bow stands beside them, second.",
+      "Words such as edges up and edges down are as the wafer lies on that tool. From bond to debond the pair lies carrier down: back side up when it is bonded by its device side, device side up when by its back side; between two carriers it lies on the one that was bonded last. Where the warp is smaller than the ± beside it, it is called flat within its uncertainty: which edges lie up is then not known. The standard bow stands beside them, second.",
   },
   {
     term: "Tolerance and ±",

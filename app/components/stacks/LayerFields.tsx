@@ -1,6 +1,7 @@
 import { getInputProps, type FieldMetadata } from "@conform-to/react";
 import { Link } from "react-router";
 import { ChoiceField } from "#app/components/forms/ChoiceField.tsx";
+import { FilmCutFields } from "#app/components/forms/FilmCutFields.tsx";
 import type { MeasuredText } from "#app/components/forms/MeasuredField.tsx";
 import { QuantityField } from "#app/components/forms/QuantityField.tsx";
 import { formatMeasured } from "#app/lib/format-measured.ts";
@@ -19,7 +20,7 @@ interface Props {
 
 /** The fields of one film of the stack. */
 export function LayerFields({ field, draft, films }: Props) {
-  const { side, film, thickness, coverage, stress } = field.getFieldset();
+  const { side, film, thickness, stress } = field.getFieldset();
   const thicknessParts = thickness.getFieldset();
   const stressParts = stress.getFieldset();
   return (
@@ -31,22 +32,14 @@ export function LayerFields({ field, draft, films }: Props) {
         choices={films.map(({ id, name }) => ({ value: id, label: name }))}
         blank="Choose"
       />
-      <div className="grid grid-cols-2 gap-3">
-        <QuantityField
-          field={thicknessParts.value}
-          label="Thickness"
-          dimension="length"
-          rule={RULES.filmThickness}
-          example="5 µm"
-        />
-        <QuantityField
-          field={coverage}
-          label="Area coverage"
-          dimension="fraction"
-          rule={RULES.coverage}
-          example="38 %"
-        />
-      </div>
+      <QuantityField
+        field={thicknessParts.value}
+        label="Thickness"
+        dimension="length"
+        rule={RULES.filmThickness}
+        example="5 µm"
+      />
+      <FilmCutFields field={field} />
       {draft?.film && <FilmStress film={draft.film} />}
       <QuantityField
         field={stressParts.value}

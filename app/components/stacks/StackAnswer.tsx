@@ -3,6 +3,7 @@ import { noBreak } from "#app/components/drawings/no-break.ts";
 import { ROOM_TEMPERATURE } from "#app/engine/laminate/layer.ts";
 import type { SiteLimits } from "#app/engine/rules/limits.ts";
 import { formatQuantity } from "#app/engine/units/format.ts";
+import { directionWords } from "#app/lib/film-cut.ts";
 import type { StackPanel } from "#app/lib/stack-panel.ts";
 import {
   againstFreeWafer,
@@ -115,6 +116,12 @@ function figuresOf({ room, hot }: StackPanel): PanelFigure[] {
   ];
 }
 
+/** Of a wafer with lines both bows, the larger first with the axis that it lies along. */
+function bowWords({ bow_m, across }: Estimated["answer"]["shape"]): string {
+  if (!across) return lengthWords(bow_m, true);
+  return `${lengthWords(bow_m, true)} ${directionWords(across.axis_rad)}, ${lengthWords(across.bow_m, true)} across that`;
+}
+
 /** Warp with its signed bow; a curled wafer has no bow but a roll radius and a lift. */
 function shapeFigure({ answer: { shape } }: Estimated, at: string): PanelFigure {
   if (shape.regime === "curled" && shape.roll_radius_m !== null)
@@ -126,6 +133,6 @@ function shapeFigure({ answer: { shape } }: Estimated, at: string): PanelFigure 
   return {
     label: `Warp, ${at}`,
     value: warpWords(shape),
-    second: `bow ${lengthWords(shape.bow_m, true)}, device side up`,
+    second: `bow ${bowWords(shape)}, device side up`,
   };
 }

@@ -1,7 +1,7 @@
 import { useState } from "react";
 import { Form, Link } from "react-router";
 import { SourceMark } from "#app/components/drawings/SourceMark.tsx";
-import { formatQuantity } from "#app/engine/units/format.ts";
+import { filmCutWords } from "#app/lib/film-cut.ts";
 import type { StackAround } from "#app/lib/stack-around.ts";
 import { stackDraft, type DraftLayer } from "#app/lib/stack-draft.ts";
 import type { StackPanel } from "#app/lib/stack-panel.ts";
@@ -87,9 +87,7 @@ function Films({ layers }: { layers: readonly DraftLayer[] }) {
             <th scope="col" className="num">
               Thickness
             </th>
-            <th scope="col" className="num">
-              Area coverage
-            </th>
+            <th scope="col">Covers</th>
             <th scope="col" className="num">
               Stress at 25 °C
             </th>
@@ -97,7 +95,7 @@ function Films({ layers }: { layers: readonly DraftLayer[] }) {
           </tr>
         </thead>
         <tbody>
-          {layers.map(({ name, film, side, thickness, coverage, stress }, index) => (
+          {layers.map(({ name, film, side, thickness, cut, stress }, index) => (
             <tr key={index}>
               <th scope="row" className="font-normal">
                 {film ? (
@@ -110,7 +108,7 @@ function Films({ layers }: { layers: readonly DraftLayer[] }) {
               </th>
               <td>{side === "front" ? "device side" : "back side"}</td>
               <td className="num">{thickness === null ? "–" : lengthWords(thickness)}</td>
-              <td className="num">{coverage === null ? "–" : formatQuantity(coverage, "fraction")}</td>
+              <td>{cut ? (filmCutWords(cut) ?? "all of it") : "–"}</td>
               <td className="num">{stress ? stressWords(stress.value) : "–"}</td>
               <td>{stress && <SourceMark kind={stress.source} />}</td>
             </tr>

@@ -1,6 +1,7 @@
 import type { CutLayer } from "#app/components/drawings/cut-layer.ts";
 import { formatQuantity } from "#app/engine/units/format.ts";
 import type { DraftLayer, StackDraft } from "#app/lib/stack-draft.ts";
+import { directionWords } from "#app/lib/film-cut.ts";
 import { lengthWords, thicknessWords } from "#app/lib/stack-words.ts";
 
 /** What a layer without a thickness is drawn as thick as, m. */
@@ -22,16 +23,16 @@ export function stackCutLayers(draft: StackDraft, selected: CutPartOf | null): {
   );
 }
 
-function filmLayer({ name, film, thickness, stress, coverage }: DraftLayer, selected: boolean): CutLayer {
+function filmLayer({ name, film, thickness, stress, cut }: DraftLayer, selected: boolean): CutLayer {
   return {
     role: "film",
     kind: film?.kind ?? "blank",
     thickness: thickness ?? NOT_TYPED,
     thicknessText: thickness === null ? "?" : lengthWords(thickness),
     stress: stress && thickness !== null ? stress.value : undefined,
-    coverage: coverage ?? undefined,
+    coverage: cut?.coverage,
     name: film ? shortName(name) : "Film not chosen",
-    notes: stress ? [stressWords(stress.value), ...sourceNotes(stress)] : [],
+    notes: [...(stress ? [stressWords(stress.value), ...sourceNotes(stress)] : []), ...lineNotes(cut)],
     assumed: stress?.source === "assumed",
     selected,
   };
@@ -45,6 +46,11 @@ export function stressWords(stress: number): string {
   if (stress === 0) return "no stress";
   const value = formatQuantity(stress, "stress", { unit: "MPa", sign: true });
   return `${value} ${stress > 0 ? "tension" : "compression"}`;
+}
+
+/** A label has little room: which way the lines run, in one short line. */
+function lineNotes(cut: DraftLayer["cut"]): string[] {
+  return cut?.lines ? [`lines ${directionWords(cut.lines.direction)}`] : [];
 }
 
 /** The cut adds 'assumed' by itself. */

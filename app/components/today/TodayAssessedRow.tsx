@@ -1,6 +1,7 @@
 import { BowLine } from "#app/components/drawings/BowLine.tsx";
 import { FindingTag } from "#app/components/drawings/FindingTag.tsx";
 import { noBreak } from "#app/components/drawings/no-break.ts";
+import { revisionLetters } from "#app/lib/assessment-revision.ts";
 import { lyingAs } from "#app/lib/lying-as.ts";
 import type { TodayAssessed } from "#app/schemas/today.ts";
 import { TodayRow } from "./TodayRow.tsx";
@@ -19,7 +20,7 @@ export function TodayAssessedRow({ row, action, exaggeration, stale = false }: P
   const { name, program, newest, sentence, wafer, diameter } = row;
   return (
     <TodayRow
-      title={`${name}, assessment ${newest.number}`}
+      title={`${name}, assessment ${revisionLetters(newest.number)}`}
       action={action}
       state={
         <>

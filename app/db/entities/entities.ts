@@ -23,6 +23,7 @@ import { SiteLimit } from "./site-limit.ts";
 import { Stack } from "./stack.ts";
 import { StackLayer } from "./stack-layer.ts";
 import { StepTemplate } from "./step-template.ts";
+import { Tape } from "./tape.ts";
 
 /** Every entity, listed by hand: the ORM finds nothing by itself. */
 export const entities = [
@@ -36,6 +37,7 @@ export const entities = [
   Carrier,
   CarrierUnit,
   BondingMaterial,
+  Tape,
   Equipment,
   SiteLimit,
   Stack,

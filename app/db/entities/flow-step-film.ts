@@ -1,5 +1,6 @@
 import { defineEntity, p, type InferEntity } from "@mikro-orm/core";
 import type { Measured } from "#app/engine/measured.ts";
+import type { FilmLines } from "#app/engine/patterned/pattern.ts";
 import type { Side } from "#app/engine/vocabulary.ts";
 import { Film } from "./film.ts";
 import { FlowStep } from "./flow-step.ts";
@@ -22,6 +23,8 @@ export const FlowStepFilm = defineEntity({
     /** for this step only; null takes the film's */
     stress: p.json<Measured>().nullable(),
     coverage: p.double().$type<number>(),
+    /** of a film cut in lines; null bends both directions alike */
+    lines: p.json<FilmLines>().nullable(),
   },
 });
 export type FlowStepFilm = InferEntity<typeof FlowStepFilm>;

@@ -8,6 +8,7 @@ import { Carrier } from "./carrier.ts";
 import { Equipment } from "./equipment.ts";
 import { Flow } from "./flow.ts";
 import { Program } from "./program.ts";
+import { Tape } from "./tape.ts";
 
 /** One step of a flow; `position` counts from 0. */
 export const FlowStep = defineEntity({
@@ -35,6 +36,8 @@ export const FlowStep = defineEntity({
     bondingMaterial: () => p.manyToOne(BondingMaterial).nullable(),
     bondThickness: p.json<Measured>().nullable(),
     groundFaceForce: p.json<Measured>().nullable(),
+    /** tape that it is put on; what `handling` says of a tape counts before it */
+    tape: () => p.manyToOne(Tape).nullable(),
     /** contact, times, tape, bumps: what the handling rules ask beyond the physics */
     handling: p.json<StepHandlingValues>(),
   },

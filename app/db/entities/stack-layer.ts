@@ -1,5 +1,6 @@
 import { defineEntity, p, type InferEntity } from "@mikro-orm/core";
 import type { Measured } from "#app/engine/measured.ts";
+import type { FilmLines } from "#app/engine/patterned/pattern.ts";
 import type { Side } from "#app/engine/vocabulary.ts";
 import { Film } from "./film.ts";
 import { Program } from "./program.ts";
@@ -21,6 +22,8 @@ export const StackLayer = defineEntity({
     /** stress for this stack only; null takes the film's */
     stress: p.json<Measured>().nullable(),
     coverage: p.double().$type<number>(),
+    /** of a film cut in lines; null bends both directions alike */
+    lines: p.json<FilmLines>().nullable(),
   },
 });
 export type StackLayer = InferEntity<typeof StackLayer>;

@@ -9,6 +9,9 @@ import { PhysicsInputs } from "./2026-12-05-physics-inputs.ts";
 import { ImportProfiles } from "./2026-12-06-import-profiles.ts";
 import { CarrierPieceVariation } from "./2026-12-06-carrier-piece-variation.ts";
 import { DebondFace } from "./2026-12-06-debond-face.ts";
+import { CarrierExpansionCurve } from "./2026-12-06-carrier-expansion-curve.ts";
+import { FilmLines } from "./2026-12-06-film-lines.ts";
+import { Tapes } from "./2026-12-06-tapes.ts";
 
 /** Every migration in the order in which it runs. */
 export const migrations = [
@@ -23,4 +26,7 @@ export const migrations = [
   { name: "2026-12-06-import-profiles", class: ImportProfiles },
   { name: "2026-12-06-carrier-piece-variation", class: CarrierPieceVariation },
   { name: "2026-12-06-debond-face", class: DebondFace },
+  { name: "2026-12-06-film-lines", class: FilmLines },
+  { name: "2026-12-06-carrier-expansion-curve", class: CarrierExpansionCurve },
+  { name: "2026-12-06-tapes", class: Tapes },
 ];

@@ -1,5 +1,5 @@
 import { bondTitle, type DemoBond, type DemoStep } from "./demo-step.ts";
-import { celsius, measured } from "./measured.ts";
+import { measured } from "./measured.ts";
 
 /** Thickness variation in µm; left out where the material's own share stands. */
 const variation = (micrometres: number | undefined) =>
@@ -44,6 +44,7 @@ export const fulmarSteps = (bond: DemoBond): DemoStep[] => [
   {
     kind: "pattern",
     title: "Coat, expose, develop thick resist",
+    handling: { solvent: "ester or glycol ether" },
     peak: 110,
     minutes: 5,
     equipment: "Coat and develop track",
@@ -62,6 +63,7 @@ export const fulmarSteps = (bond: DemoBond): DemoStep[] => [
   {
     kind: "clean",
     title: "Strip resist, etch seed",
+    handling: { solvent: "polar aprotic" },
     peak: 60,
     minutes: 10,
     equipment: "Single-wafer wet or plating",
@@ -179,6 +181,7 @@ export const fulmarSteps = (bond: DemoBond): DemoStep[] => [
   {
     kind: "pattern",
     title: "Coat, expose, develop back-side resist",
+    handling: { solvent: "ester or glycol ether" },
     peak: 110,
     minutes: 3,
     equipment: "Mask aligner or stepper",
@@ -188,6 +191,7 @@ export const fulmarSteps = (bond: DemoBond): DemoStep[] => [
   {
     kind: "plate",
     title: "Plate back-side pads 4 µm, 8 %, strip, etch seed",
+    handling: { solvent: "polar aprotic" },
     peak: 40,
     minutes: 15,
     equipment: "Single-wafer wet or plating",
@@ -216,13 +220,8 @@ export const fulmarSteps = (bond: DemoBond): DemoStep[] => [
   {
     kind: "mount on frame",
     title: "Mount back side on film frame",
-    handling: {
-      timeSincePrevious: 4 * 3600,
-      tapeName: "Dicing tape A",
-      tapeTemperatureLimit: measured(celsius(80), null, "supplier"),
-      tapeReleasesInLight: true,
-      tapeSolvent: "unknown",
-    },
+    tape: "Dicing tape A",
+    handling: { timeSincePrevious: 4 * 3600, tapeSolvent: "unknown" },
     peak: 25,
     equipment: "Frame mounter",
     planned: "carrier",

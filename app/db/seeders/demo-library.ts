@@ -4,9 +4,11 @@ import { BondingMaterial } from "../entities/bonding-material.ts";
 import { CarrierUnit } from "../entities/carrier-unit.ts";
 import { Carrier } from "../entities/carrier.ts";
 import { Film } from "../entities/film.ts";
+import { Tape } from "../entities/tape.ts";
 import { DEMO_BONDING_MATERIALS, DEMO_CARRIERS, type DemoBondingMaterial } from "./demo-bonding.ts";
 import { DEMO_FILMS } from "./demo-films.ts";
 import { celsius, measured } from "./measured.ts";
+import { DEMO_TAPES } from "./reference-tapes.ts";
 import { delivered } from "./reference-seeder.ts";
 
 const MEASURED_ON = "2026-10-21";
@@ -64,6 +66,7 @@ export function addDemoLibrary(em: EntityManager): void {
       expansionRange: carrier.expansion === null ? "silicon's own curve" : "25 to 150 °C mean",
       meanExpansionFrom: carrier.expansion === null ? null : celsius(25),
       meanExpansionTo: carrier.expansion === null ? null : celsius(150),
+      expansionCurve: null,
       density: property(carrier.density, 10),
       thicknessVariation: property(carrier.thicknessVariation * 1e-6, null),
       temperatureLimit: property(celsius(carrier.limit), null),
@@ -76,6 +79,7 @@ export function addDemoLibrary(em: EntityManager): void {
     for (const piece of carrier.pieces ?? [])
       em.create(CarrierUnit, { ...delivered(), carrier: kind, thicknessVariation: null, ...piece });
   }
+  for (const tape of DEMO_TAPES) em.create(Tape, { ...delivered(), ...tape });
   for (const material of DEMO_BONDING_MATERIALS) {
     const property = (value: number, tolerance: number | null) => measured(value, tolerance, "supplier");
     em.create(BondingMaterial, {

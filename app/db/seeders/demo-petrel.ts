@@ -1,5 +1,5 @@
 import { bondTitle, type DemoBond, type DemoStep } from "./demo-step.ts";
-import { celsius, measured } from "./measured.ts";
+import { measured } from "./measured.ts";
 
 /** Program Petrel: 300 mm, to 50 µm with back-side metal, on a glass carrier let go by laser. */
 export const petrelSteps = (bond: DemoBond): DemoStep[] => [
@@ -50,6 +50,7 @@ export const petrelSteps = (bond: DemoBond): DemoStep[] => [
   {
     kind: "pattern",
     title: "Coat, expose, develop resist",
+    handling: { solvent: "ester or glycol ether" },
     peak: 110,
     minutes: 3,
     equipment: "Coat and develop track",
@@ -68,7 +69,7 @@ export const petrelSteps = (bond: DemoBond): DemoStep[] => [
   {
     kind: "clean",
     title: "Strip resist, etch seed",
-    handling: { topography: measured(4e-6, 0.5e-6, "measured here") },
+    handling: { solvent: "polar aprotic", topography: measured(4e-6, 0.5e-6, "measured here") },
     peak: 60,
     minutes: 10,
     equipment: "Single-wafer wet or plating",
@@ -185,13 +186,8 @@ export const petrelSteps = (bond: DemoBond): DemoStep[] => [
   {
     kind: "mount on frame",
     title: "Mount back side on film frame",
-    handling: {
-      timeSincePrevious: 4 * 3600,
-      tapeName: "Dicing tape A",
-      tapeTemperatureLimit: measured(celsius(80), null, "supplier"),
-      tapeReleasesInLight: true,
-      tapeSolvent: "unknown",
-    },
+    tape: "Dicing tape A",
+    handling: { timeSincePrevious: 4 * 3600, tapeSolvent: "unknown" },
     peak: 25,
     equipment: "Frame mounter",
     planned: "carrier",

@@ -40,6 +40,7 @@ export interface DemoStep {
   trim?: { width: number; depth: number };
   groundFaceForce?: number;
   bond?: DemoBond;
+  tape?: string;
   /** SI, as it is stored */
   handling?: Partial<StepHandlingValues>;
 }

@@ -1,5 +1,5 @@
 import type { DemoStep } from "./demo-step.ts";
-import { celsius, measured } from "./measured.ts";
+import { measured } from "./measured.ts";
 
 /** Program Tern: 200 mm, to 100 µm, redistribution layer and balls, on tape from the grind on. */
 export const TERN_STEPS: DemoStep[] = [
@@ -53,6 +53,7 @@ export const TERN_STEPS: DemoStep[] = [
   {
     kind: "pattern",
     title: "Coat, expose, develop resist",
+    handling: { solvent: "ester or glycol ether" },
     peak: 110,
     minutes: 3,
     equipment: "Coat and develop track",
@@ -71,6 +72,7 @@ export const TERN_STEPS: DemoStep[] = [
   {
     kind: "clean",
     title: "Strip resist, etch seed between lines",
+    handling: { solvent: "polar aprotic" },
     peak: 60,
     minutes: 10,
     equipment: "Single-wafer wet or plating",
@@ -136,13 +138,7 @@ export const TERN_STEPS: DemoStep[] = [
   {
     kind: "laminate tape",
     title: "Laminate bump-embedding grinding tape, 200 µm embedding layer",
-    handling: {
-      tapeName: "Bump-embedding grinding tape A",
-      tapeTemperatureLimit: measured(celsius(80), null, "supplier"),
-      tapeEmbeddingDepth: measured(200e-6, 10e-6, "supplier"),
-      tapeThicknessVariation: measured(3e-6, null, "supplier"),
-      tapeReleasesInLight: true,
-    },
+    tape: "Bump-embedding grinding tape A",
     peak: 60,
     minutes: 1,
     equipment: "Tape laminator",
@@ -173,13 +169,8 @@ export const TERN_STEPS: DemoStep[] = [
   {
     kind: "mount on frame",
     title: "Mount on film frame in line, peel grinding tape",
-    handling: {
-      inLine: true,
-      timeSincePrevious: 600,
-      tapeName: "Dicing tape A",
-      tapeTemperatureLimit: measured(celsius(80), null, "supplier"),
-      tapeReleasesInLight: true,
-    },
+    tape: "Dicing tape A",
+    handling: { inLine: true, timeSincePrevious: 600 },
     peak: 60,
     minutes: 1,
     equipment: "Frame mounter",

@@ -23,6 +23,7 @@ interface ReferenceCarrier {
   /** K */
   meanExpansionFrom: number | null;
   meanExpansionTo: number | null;
+  expansionCurve: null;
   density: Measured;
   thicknessVariation: Measured;
   passesUltraviolet: boolean;
@@ -49,6 +50,7 @@ const glass = (
   expansionRange: `${from} to ${to} °C mean`,
   meanExpansionFrom: celsius(from),
   meanExpansionTo: celsius(to),
+  expansionCurve: null,
   density,
   thicknessVariation: assumed(2 * um, 1 * um),
   passesUltraviolet: true,
@@ -68,6 +70,7 @@ const silicon = (diameter: number, thickness: number): ReferenceCarrier => ({
   expansionRange: "silicon's own curve",
   meanExpansionFrom: null,
   meanExpansionTo: null,
+  expansionCurve: null,
   density: measured(2329, 1, "handbook", "from memory of the named publication"),
   thicknessVariation: assumed(1 * um, 0.5 * um),
   passesUltraviolet: false,

@@ -18,10 +18,12 @@ import { Silicon } from "../entities/silicon.ts";
 import { FlowTemplate } from "../entities/flow-template.ts";
 import { SiteLimit } from "../entities/site-limit.ts";
 import { StepTemplate } from "../entities/step-template.ts";
+import { Tape } from "../entities/tape.ts";
 import { celsius, measured } from "./measured.ts";
 import { REFERENCE_BONDING_MATERIALS, REFERENCE_CARRIERS, REFERENCE_SILICON } from "./reference-bonding.ts";
 import { REFERENCE_EQUIPMENT, type ReferenceTool } from "./reference-equipment.ts";
 import { REFERENCE_FILMS } from "./reference-films.ts";
+import { REFERENCE_TAPES } from "./reference-tapes.ts";
 import { seedLibrary } from "./seed-library.ts";
 import { TEMPLATE_FLOWS, templateSteps } from "./template-flows.ts";
 
@@ -84,6 +86,9 @@ export class ReferenceSeeder extends Seeder {
           handling: BLANK_MATERIAL_HANDLING,
           ...material,
         });
+
+    const tapes = new Set((await em.findAll(Tape)).map(({ name }) => name));
+    for (const tape of REFERENCE_TAPES) if (!tapes.has(tape.name)) em.create(Tape, { ...delivered(), ...tape });
     await em.flush();
     await addTemplates(em);
   }

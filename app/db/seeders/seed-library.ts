@@ -4,6 +4,7 @@ import { Carrier } from "../entities/carrier.ts";
 import { Equipment } from "../entities/equipment.ts";
 import { Film } from "../entities/film.ts";
 import { Silicon } from "../entities/silicon.ts";
+import { Tape } from "../entities/tape.ts";
 
 type Find<Entity> = (name: string) => Entity;
 
@@ -13,6 +14,7 @@ export interface SeedLibrary {
   tool: Find<Equipment>;
   carrier: Find<Carrier>;
   material: Find<BondingMaterial>;
+  tape: Find<Tape>;
   silicon: Find<Silicon>;
 }
 
@@ -31,6 +33,7 @@ export async function seedLibrary(em: EntityManager): Promise<SeedLibrary> {
     tool: byName("tool", await em.findAll(Equipment)),
     carrier: byName("carrier", await em.findAll(Carrier)),
     material: byName("bonding material", await em.findAll(BondingMaterial)),
+    tape: byName("tape", await em.findAll(Tape)),
     silicon: byName("silicon wafer", await em.findAll(Silicon)),
   };
 }

@@ -30,6 +30,7 @@ export function seedStep(step: DemoStep, library: SeedLibrary): StepValues {
     bondThickness: bond ? measured(bond.thickness * 1e-6, 2e-6, "supplier", "coater recipe") : null,
     groundFaceForce:
       force === undefined ? null : measured(force, Math.abs(force) / 2, "handbook", "common practice, no source"),
+    tape: step.tape === undefined ? null : library.tape(step.tape).id,
     handling: { ...BLANK_HANDLING, ...step.handling },
     films: [
       ...removes.map(({ side, film }) => ({

@@ -110,6 +110,12 @@ const genericAdds = ({ film, thickness, stress: _stress, ...addition }: DemoAddi
     thickness: Number((thickness * share).toPrecision(3)),
   }));
 
+/** A tape of the pilot line as the reference library has it. */
+const genericTape = (name: string) =>
+  name === "Bump-embedding grinding tape A"
+    ? "Grinding tape for bumps, ultraviolet release"
+    : "Dicing tape, ultraviolet release";
+
 const isMeasured = (value: unknown): value is Measured =>
   typeof value === "object" && value !== null && "source" in value;
 
@@ -128,6 +134,7 @@ export function templateSteps({ steps }: TemplateFlow, library: SeedLibrary): St
       seedStep(
         {
           ...step,
+          tape: step.tape && genericTape(step.tape),
           adds: step.adds?.flatMap(genericAdds),
           removes: step.removes?.flatMap(({ side, film }) =>
             generic(film)

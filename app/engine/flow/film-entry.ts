@@ -1,9 +1,9 @@
 import type { DirectionalLayer } from "../directional/layer.ts";
-import { isotropicStiffness, type PlaneStiffness } from "../directional/plane-stiffness.ts";
 import { EngineInputError } from "../errors.ts";
 import { ROOM_TEMPERATURE, type Expansion, type Layer } from "../laminate/layer.ts";
+import { meanOfDirections } from "../patterned/mean-of-directions.ts";
 import { checkPattern, coverageOf, type FilmPattern } from "../patterned/pattern.ts";
-import { edgeReliefOf, patternStiffness } from "../patterned/pattern-stiffness.ts";
+import { edgeReliefOf } from "../patterned/pattern-stiffness.ts";
 import { siliconThermalStrain } from "../silicon/expansion.ts";
 import type { FilmAddition, FilmInput } from "./model.ts";
 import { stackEntry, type StackEntry } from "./stack-entry.ts";
@@ -42,28 +42,11 @@ export function filmEntry(addition: FilmAddition): StackEntry {
   return patternedEntry(blanket, pattern, film.name);
 }
 
-/**
- * In a laminate of equal directions a pattern counts with the mean of both: less stiff, and with as much less force. `stress`
- * is then the mean over the film's own cross-section.
- */
 function patternedEntry(blanket: Layer & { stress: number }, pattern: FilmPattern, field: string): StackEntry {
-  const { youngsModulus, poissonsRatio } = blanket;
-  const cut = patternStiffness({ ...blanket, pattern });
-  const share = biaxial(cut) / biaxial(isotropicStiffness(youngsModulus, poissonsRatio));
-  const made = stackEntry(
-    {
-      ...blanket,
-      youngsModulus: youngsModulus * share,
-      stress: blanket.stress * share,
-      coverage: coverageOf(pattern),
-    },
-    field,
-  );
+  const made = stackEntry(meanOfDirections(blanket, pattern), field);
   const directional: DirectionalLayer = { ...blanket, pattern };
   return pattern.kind === "lines" ? { ...made, directional } : made;
 }
-
-const biaxial = (q: PlaneStiffness) => (q.xx + 2 * q.xy + q.yy) / 2;
 
 /**
  * A polymer with a zero-stress temperature expands so that its stress on thick silicon falls from that at 25 °C to zero there;

@@ -62,6 +62,8 @@ export interface BumpsInput {
 
 /** Grinding tape, dicing tape on a frame, or the tape of an edge ring. */
 export interface TapeInput {
+  /** the record of the library that it is; missing: only what the step itself states of it */
+  id?: string | null;
   name: string;
   /** missing: the site's limit for tape */
   temperatureLimit?: Measured | null;

@@ -1,6 +1,7 @@
 import type { Layer } from "../laminate/layer.ts";
 import type { LaminateBalance } from "../laminate/solve-laminate.ts";
 import { freeWaferShape, type FreeWaferShapeInput } from "../plate/free-wafer-shape.ts";
+import { nearestAxes } from "../silicon/nearest-axes.ts";
 import type { FaceUp, ShapeRegime, ShapeWord } from "../vocabulary.ts";
 import { waferConstants } from "./silicon.ts";
 import type { UnequalCurvature } from "./unequal.ts";
@@ -54,6 +55,7 @@ export function lyingShape(
     linearCurvature: unequal ? { x: unequal.principal.major, y: unequal.principal.minor } : solution.curvature,
     // The crystal's preferred axes matter for silicon alone; a pair is governed by its isotropic partner too.
     crystal: bonded || wafer.orientation !== "100" ? undefined : "100",
+    ...(unequal && { axes: nearestAxes(unequal.principal.angle) }),
   };
   const shape = freeWaferShape(disc);
   return {

@@ -86,7 +86,7 @@ export function withBackFilm(stack: StackInput, film: BackFilm, thickness: numbe
 
 /**
  * Thickness of an outermost back-side film, m, that makes the free wafer flat at the stack's temperature, and the sagitta that is
- * left at `others` (K), where the films no longer balance.
+ * left at `others` (K), where the films no longer balance. With lines the mean of both directions is made flat.
  * @throws EngineInputError naming the input
  */
 export function balancingFilm(
@@ -96,7 +96,7 @@ export function balancingFilm(
   others: readonly number[] = [],
 ): Balance {
   const answer = solveFor({
-    model: (thickness) => freeDisc(withBackFilm(stack, film, thickness)).disc.linearCurvature,
+    model: (thickness) => freeDisc(withBackFilm(stack, film, thickness)).laminate.curvature,
     from: range.thinnest,
     to: range.thickest,
     target: 0,

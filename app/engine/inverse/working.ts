@@ -119,7 +119,7 @@ export function balancingFilmWorking(stack: StackInput, film: BackFilm, range: T
       {
         symbol: "κ",
         meaning: "curvature left, bowl positive",
-        value: freeDisc(balanced).disc.linearCurvature,
+        value: freeDisc(balanced).laminate.curvature,
         unit: "1/m",
       },
     ],

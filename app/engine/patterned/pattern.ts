@@ -16,6 +16,17 @@ export type FilmPattern =
   | { kind: "islands"; coverage: number; size: number }
   | { kind: "random"; coverage: number };
 
+/** Lines as a stack or a step names them, beside the area that they cover: width, m, and direction, rad, as in `FilmPattern`. */
+export interface FilmLines {
+  width: number;
+  direction: number;
+}
+
+/** The pattern of a film cut in lines that cover the share `coverage` of the area. */
+export function linesPattern({ width, direction }: FilmLines, coverage: number): FilmPattern & { kind: "lines" } {
+  return { kind: "lines", coverage, lineWidth: width, direction };
+}
+
 /** Returns the pattern when all of it is legal, else throws `EngineInputError` naming the part. */
 export function checkPattern(pattern: FilmPattern, field: string): FilmPattern {
   switch (pattern.kind) {

@@ -6,7 +6,7 @@ import { standardBow } from "../stoney/bow.ts";
 import { formatQuantity, formatWithUncertainty } from "../units/format.ts";
 import { inSentence } from "../in-sentence.ts";
 import type { FaceUp, Outcome } from "../vocabulary.ts";
-import { outcomeRank } from "../vocabulary.ts";
+import { FLAT_WITHIN_UNCERTAINTY, flatWithinUncertainty, outcomeRank } from "../vocabulary.ts";
 import { againstUpperLimit, exceeds } from "./against-limit.ts";
 import type { Finding, Rule, RuleContext } from "./finding.ts";
 import { shareBeyond, sharedBy } from "./share-beyond.ts";
@@ -87,7 +87,10 @@ function inWords({ shape, uncertainty }: Moment, direction: string, flatWithin: 
   const warp = uncertainty
     ? formatWithUncertainty(shape.warp, 2 * uncertainty, "length", { unit: "µm" })
     : um(shape.warp);
-  return exceeds(shape.warp, flatWithin) ? `${direction} ${warp}` : `flat, ${warp}`;
+  if (!exceeds(shape.warp, flatWithin)) return `flat, ${warp}`;
+  return flatWithinUncertainty(shape.warp, uncertainty)
+    ? `${FLAT_WITHIN_UNCERTAINTY}, ${warp}`
+    : `${direction} ${warp}`;
 }
 
 function judgeMoment(

@@ -1,3 +1,4 @@
+import type { FilmLines } from "../patterned/pattern.ts";
 import type { Orientation } from "../silicon/orientation.ts";
 import type { Side } from "../vocabulary.ts";
 
@@ -15,6 +16,8 @@ export interface StackFilm {
   referenceTemperature?: number | undefined;
   /** area fraction, default 1 */
   coverage?: number | undefined;
+  /** the film is cut in lines that cover that area; without it both directions bend alike */
+  lines?: FilmLines | undefined;
   /** half-widths; none: counted as exact */
   thicknessTolerance?: number | undefined;
   stressTolerance?: number | undefined;

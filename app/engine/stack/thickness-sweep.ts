@@ -1,7 +1,7 @@
 import { EngineInputError } from "../errors.ts";
 import { ROOM_TEMPERATURE } from "../laminate/layer.ts";
 import { criticalLinearCurvature } from "../plate/critical-load.ts";
-import { shapeRegime } from "../plate/free-wafer-shape.ts";
+import { freeWaferShape, shapeRegime } from "../plate/free-wafer-shape.ts";
 import { bowFromCurvature } from "../stoney/bow.ts";
 import { laminateInputValues, laminateModel } from "../uncertainty/laminate-model.ts";
 import { shapeCurve, type ShapeCurve } from "../uncertainty/shape-curve.ts";
@@ -22,7 +22,7 @@ export interface SweepPoint {
 /**
  * Warp of the free wafer over a range of silicon thickness (m), at `points` thicknesses spaced evenly on a logarithmic scale.
  * For a chart that follows every keystroke: the laminate is compiled once, and the shape is read from `shapeCurve`, so a warp is
- * within 1e-4 of that of `estimateStack`.
+ * within 1e-4 of that of `estimateStack`. With a film in lines each point is that of `estimateStack` itself.
  * @throws EngineInputError when the range is empty or fewer than two points are asked
  */
 export function thicknessSweep(stack: StackInput, range: { from: number; to: number; points: number }): SweepPoint[] {
@@ -31,8 +31,20 @@ export function thicknessSweep(stack: StackInput, range: { from: number; to: num
     throw new EngineInputError("sweep", "the range of thickness is empty", "0 m < from < to");
   if (!Number.isInteger(points) || points < 2 || points > 500)
     throw new EngineInputError("sweep.points", "the number of points is out of range", "2 to 500");
-  const { disc } = freeDisc(withThickness(stack, to));
+  const thicknesses = Array.from({ length: points }, (_, index) =>
+    index === points - 1 ? to : from * (to / from) ** (index / (points - 1)),
+  );
+  const { disc, unequal } = freeDisc(withThickness(stack, to));
   const pulling = atItsTemperature(stack);
+  const linearWarp = (thickness: number) =>
+    Math.abs(
+      bowFromCurvature({ curvature: thinFilmCurvature(withThickness(pulling, thickness)), radius: disc.radius }),
+    );
+  if (unequal)
+    return thicknesses.map((thickness) => {
+      const { warp, regime } = freeWaferShape(freeDisc(withThickness(stack, thickness)).disc);
+      return { thickness, warp, linearWarp: linearWarp(thickness), regime };
+    });
   const layers = laminateOfStack(withThickness(stack, to));
   const place = layers.findIndex(({ cte }) => cte === "silicon");
   const curve = siliconCurve(disc);
@@ -49,17 +61,10 @@ export function thicknessSweep(stack: StackInput, range: { from: number; to: num
     },
     "warp",
   );
-  return Array.from({ length: points }, (_, index) => {
-    const thickness = index === points - 1 ? to : from * (to / from) ** (index / (points - 1));
+  return thicknesses.map((thickness) => {
     inputs[place] = thickness;
     model.evaluate(inputs, 1, warp);
-    const curvature = thinFilmCurvature(withThickness(pulling, thickness));
-    return {
-      thickness,
-      warp: warp[0] ?? 0,
-      linearWarp: Math.abs(bowFromCurvature({ curvature, radius: disc.radius })),
-      regime,
-    };
+    return { thickness, warp: warp[0] ?? 0, linearWarp: linearWarp(thickness), regime };
   });
 }
 
@@ -99,7 +104,9 @@ const HALVINGS = 50;
 export function curlingThickness(stack: StackInput, upTo: number): number | null {
   const rolls = (thickness: number) => {
     const { disc } = freeDisc(withThickness(stack, thickness));
-    return Math.abs(disc.linearCurvature) > criticalLinearCurvature(disc);
+    return typeof disc.linearCurvature === "number"
+      ? Math.abs(disc.linearCurvature) > criticalLinearCurvature(disc)
+      : freeWaferShape(disc).regime === "curled";
   };
   if (rolls(upTo)) return upTo;
   let stable = upTo;

@@ -1,10 +1,12 @@
+import { directionalLaminateWorking } from "../directional/working.ts";
 import { ROOM_TEMPERATURE } from "../laminate/layer.ts";
 import { laminateWorking } from "../laminate/working.ts";
+import { directionalStoneyWorking, patternedFilmWorking } from "../patterned/working.ts";
 import { freeWaferShapeWorking } from "../plate/working.ts";
 import { siliconBiaxialModulus } from "../silicon/biaxial-modulus.ts";
 import { bowFromCurvatureWorking, filmForceWorking, stoneyCurvatureWorking } from "../stoney/working.ts";
 import type { Working } from "../working.ts";
-import { coveredStress, type StackEstimate } from "./estimate-stack.ts";
+import { blanketStress, patternedOf, pullOf, unequalThinFilm, type StackEstimate } from "./estimate-stack.ts";
 import { laminateOfStack } from "./laminate-of-stack.ts";
 import type { StackFilm, StackInput } from "./model.ts";
 
@@ -24,25 +26,48 @@ export function stackWorking(stack: StackInput, estimate: StackEstimate): StackW
   const temperature = stack.temperature ?? ROOM_TEMPERATURE;
   const shape = freeWaferShapeWorking(estimate.disc);
   const stoney = bowFromCurvatureWorking({ curvature: estimate.stoney.curvature, radius: wafer.diameter / 2 });
+  const filmForces = films.map((film) => forceWorking({ ...film, stress: blanketStress(film, temperature) }));
   return {
-    shape: { ...shape, from: [laminateWorking(laminateOfStack(stack), { temperature }), ...(shape.from ?? [])] },
-    stoney: {
-      ...stoney,
-      note: "The curvatures of the films add up; a film on the back side counts with its stress reversed.",
-      from: films.map((film) => filmCurvature(film, stack, temperature)),
-    },
-    filmForces: films.map((film) =>
-      filmForceWorking({
-        stress: coveredStress({ ...film, coverage: 1 }, temperature),
-        thickness: film.thickness,
-        coverage: film.coverage,
-      }),
-    ),
+    shape: { ...shape, from: [...laminateWorkings(stack, estimate), ...(shape.from ?? [])] },
+    stoney: estimate.unequal
+      ? {
+          ...stoney,
+          note: "The films’ forces add up by direction, those of the back side reversed; x and y are the axes of the sum.",
+          from: [unequalCurvature(stack, filmForces)],
+        }
+      : {
+          ...stoney,
+          note: "The curvatures of the films add up; a film on the back side counts with its stress reversed.",
+          from: films.map((film) => filmCurvature(film, stack, temperature)),
+        },
+    filmForces,
   };
 }
 
+/** Of a stack with lines both curvatures, x along the notch axis. */
+function laminateWorkings(stack: StackInput, { unequal }: StackEstimate): Working[] {
+  const { temperature = ROOM_TEMPERATURE } = stack;
+  if (!unequal) return [laminateWorking(laminateOfStack(stack), { temperature })];
+  return (["curvatureX", "curvatureY"] as const).map((part) =>
+    directionalLaminateWorking(unequal.layers, part, { temperature }),
+  );
+}
+
+function unequalCurvature(stack: StackInput, filmForces: Working[]): Working {
+  const { input, axis } = unequalThinFilm(stack);
+  return { ...directionalStoneyWorking(input, axis), from: filmForces };
+}
+
+/** Force of a film at its reference temperature; of lines along the axis, notch or across, along which it is larger. */
+function forceWorking(film: StackFilm): Working {
+  const { stress, thickness, coverage, lines } = film;
+  if (!lines) return filmForceWorking({ stress, thickness, coverage });
+  const { x, y } = pullOf(film);
+  return patternedFilmWorking(patternedOf(film, lines), Math.abs(x) >= Math.abs(y) ? "x" : "y");
+}
+
 function filmCurvature(film: StackFilm, { wafer }: StackInput, temperature: number): Working {
-  const stress = coveredStress(film, temperature);
+  const stress = blanketStress(film, temperature) * (film.coverage ?? 1);
   const working = stoneyCurvatureWorking({
     filmStress: film.side === "front" ? stress : -stress,
     filmThickness: film.thickness,

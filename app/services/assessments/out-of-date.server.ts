@@ -51,13 +51,14 @@ export async function outOfDateAmong(
          join silicon on silicon.id = flow.silicon_id
         cross join (select max(updated_at) as saved, sum(version) as versions from site_limit) limits
         cross join lateral (
-          select max(greatest(equipment.updated_at, carrier.updated_at, bonding_material.updated_at)) as saved,
+          select max(greatest(equipment.updated_at, carrier.updated_at, bonding_material.updated_at, tape.updated_at)) as saved,
                  sum(coalesce(equipment.version, 0) + coalesce(carrier.version, 0)
-                   + coalesce(bonding_material.version, 0)) as versions
+                   + coalesce(bonding_material.version, 0) + coalesce(tape.version, 0)) as versions
             from flow_step step
             left join equipment on equipment.id = step.equipment_id
             left join carrier on carrier.id = step.carrier_id
             left join bonding_material on bonding_material.id = step.bonding_material_id
+            left join tape on tape.id = step.tape_id
            where step.flow_id = flow.id) tools
         cross join lateral (
           select max(film.updated_at) as saved, sum(film.version) as versions

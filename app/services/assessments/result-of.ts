@@ -83,6 +83,7 @@ function shapeResult(
   return {
     temperature: lying.temperature,
     bow: standardBow(lying.sagitta),
+    ...(lying.unequal && { bowAcross: standardBow(lying.sagittaMinor) }),
     warp: lying.warp,
     edgesUp: edgesUp(lying, faceUp),
     regime: lying.regime,

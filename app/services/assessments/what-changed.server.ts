@@ -35,6 +35,7 @@ const KEPT = {
   film: ["film", "id"],
   carrier: ["carrier", "id"],
   bondingMaterial: ["bonding_material", "id"],
+  tape: ["tape", "id"],
   equipment: ["equipment", "id"],
   limit: ["site_limit", "key"],
 } as const satisfies Record<Exclude<InputRecord, "flow">, readonly [string, string]>;

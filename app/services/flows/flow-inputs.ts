@@ -3,6 +3,8 @@ import type { CarrierUnit } from "#app/db/entities/carrier-unit.ts";
 import type { Carrier } from "#app/db/entities/carrier.ts";
 import type { Equipment } from "#app/db/entities/equipment.ts";
 import type { Film } from "#app/db/entities/film.ts";
+import type { Tape } from "#app/db/entities/tape.ts";
+import type { TapeInput } from "#app/engine/flow/handling-inputs.ts";
 import type {
   BondingMaterialInput,
   CarrierInput,
@@ -12,7 +14,9 @@ import type {
   IncomingShape,
   StepInput,
 } from "#app/engine/flow/model.ts";
+import { linesPattern } from "#app/engine/patterned/pattern.ts";
 import { incomingFromBows } from "#app/engine/flow/silicon.ts";
+import { expansionCurveOf, meanOfCurve } from "#app/lib/expansion-rows.ts";
 import { bondHandlingOf, stepHandlingOf, stepRunOf } from "#app/lib/flow-handling.ts";
 import {
   bondingMaterialHandlingOf,
@@ -20,7 +24,9 @@ import {
   pieceHandlingOf,
   equipmentHandlingOf,
   filmHandlingOf,
+  tapeHandlingOf,
 } from "#app/lib/library-handling.ts";
+import type { LibraryRecords } from "#app/schemas/library-records.ts";
 import type { FlowDetail, StepDetail } from "#app/schemas/flow-view.ts";
 
 /**
@@ -43,8 +49,8 @@ export function filmInput({ id, name, kind, ...film }: Film): FilmInput {
   };
 }
 
-export function carrierInput({ id, name, material, ...carrier }: Carrier): CarrierInput {
-  const { meanExpansionFrom: from, meanExpansionTo: to } = carrier;
+export function carrierInput({ id, name, material, ...carrier }: Carrier | LibraryRecords["carrier"]): CarrierInput {
+  const { meanExpansionFrom: from, meanExpansionTo: to, expansionCurve: curve } = carrier;
   return {
     id,
     name,
@@ -53,7 +59,9 @@ export function carrierInput({ id, name, material, ...carrier }: Carrier): Carri
     diameter: carrier.diameter,
     youngsModulus: carrier.youngsModulus,
     poissonsRatio: carrier.poissonsRatio,
-    expansion: carrier.expansion ?? null,
+    // The curve's own mean stands for what it is uncertain by and where it comes from.
+    expansion: carrier.expansion ?? (curve ? meanOfCurve(curve) : null),
+    ...(curve && { expansionCurve: expansionCurveOf(curve) }),
     meanExpansionOver: typeof from === "number" && typeof to === "number" ? { from, to } : null,
     temperatureLimit: carrier.temperatureLimit,
     ...carrierHandlingOf(carrier),
@@ -98,6 +106,18 @@ export function equipmentInput({ id, name, ...tool }: Equipment): EquipmentInput
   };
 }
 
+export function tapeInput({ id, name, handling, ...tape }: Tape): TapeInput & { id: string } {
+  return {
+    id,
+    name,
+    temperatureLimit: tape.temperatureLimit ?? null,
+    embeddingDepth: tape.embeddingDepth ?? null,
+    thicknessVariation: tape.thicknessVariation ?? null,
+    longestTime: tape.longestTime ?? null,
+    ...tapeHandlingOf(handling),
+  };
+}
+
 /** The flow as the engine takes it, complete in itself. */
 export function flowInputOf(
   flow: Pick<FlowDetail, Exclude<keyof FlowDetail, "id" | "note" | "program" | "stamp" | "mayEdit" | "mayAssess">>,
@@ -139,9 +159,19 @@ function stepInputOf(step: StepDetail): StepInput {
     exposures: step.exposures,
     planned: step.planned,
     siliconAfter: step.siliconAfter,
-    adds: step.films.flatMap(({ change, side, film, thickness, stress, stressRecord, coverage }) =>
+    adds: step.films.flatMap(({ change, side, film, thickness, stress, stressRecord, coverage, lines }) =>
       change === "adds" && thickness
-        ? [{ side, film, thickness, stress, coverage, ...(stressRecord ? { stressRecord } : {}) }]
+        ? [
+            {
+              side,
+              film,
+              thickness,
+              stress,
+              coverage,
+              ...(lines ? { pattern: linesPattern(lines, coverage) } : {}),
+              ...(stressRecord ? { stressRecord } : {}),
+            },
+          ]
         : [],
     ),
     removes: step.films.flatMap(({ change, side, film }) =>
@@ -154,6 +184,6 @@ function stepInputOf(step: StepDetail): StepInput {
         : null,
     groundFaceForce: step.groundFaceForce,
     ...stepRunOf(step.handling),
-    ...stepHandlingOf(step.handling),
+    ...stepHandlingOf(step.handling, step.tape),
   };
 }

@@ -2,19 +2,15 @@ import type { EntityManager } from "@mikro-orm/postgresql";
 import { FlowTemplate } from "#app/db/entities/flow-template.ts";
 import { completeStep } from "#app/lib/blank-step.ts";
 import { stepRows } from "#app/lib/flow-rows.ts";
-import { forLibrary } from "#app/lib/step-edits.ts";
 import { PAGE_SIZE, type ListPage, type ListParams } from "#app/lib/list-params.ts";
 import { mayOnSite } from "#app/policies/permissions.ts";
 import type { FlowTemplateDetail, FlowTemplateRow } from "#app/schemas/template-view.ts";
 import { notFound } from "#app/server/problem.server.ts";
 import { inScope, type ActorScope } from "#app/server/scope.server.ts";
 import { escapeLike } from "../like.server.ts";
-import { requireInProgram, requireOnSite } from "../permission.server.ts";
-import { newRecord, stampOf } from "../record.server.ts";
+import { requireOnSite } from "../permission.server.ts";
+import { stampOf } from "../record.server.ts";
 import { idFrom } from "../uuid.server.ts";
-import { freeName, takingName } from "./free-name.server.ts";
-import { readPlan } from "./plan.server.ts";
-import { findFlow } from "./read-flow.server.ts";
 import { stepDetails } from "./step-details.server.ts";
 
 export const FLOW_TEMPLATE_SORTS = ["name", "diameter", "updated"] as const;
@@ -78,29 +74,6 @@ export async function getFlowTemplate(scope: ActorScope, id: string | undefined)
       mayEdit: mayOnSite(scope.actor, "edit the step library"),
     };
   });
-}
-
-/** Keeps a flow as a template for the whole site, under its name or the next free one. Its name and steps are then seen by all programs. */
-export async function keepFlow(scope: ActorScope, flowId: string): Promise<string> {
-  requireOnSite(scope, "edit the step library");
-  return takingName(() =>
-    inScope(scope, async (em) => {
-      const flow = await findFlow(em, scope, flowId);
-      requireInProgram(scope, "edit stacks and flows", flow.program.id, "flow");
-      const { plan } = await readPlan(em, flow);
-      const taken = await em.find(FlowTemplate, {}, { fields: ["name"] });
-      const kept = em.create(FlowTemplate, {
-        ...newRecord(scope),
-        name: freeName(flow.name, new Set(taken.map(({ name }) => name))),
-        note: "",
-        diameter: flow.silicon.diameter,
-        incomingThickness: plan.incomingThickness,
-        steps: plan.steps.map(({ id: _id, ...step }) => forLibrary(step)),
-      });
-      await em.flush();
-      return kept.id;
-    }),
-  );
 }
 
 /** Renames a flow template, or changes its note. */

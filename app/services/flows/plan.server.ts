@@ -9,6 +9,7 @@ import { FlowStepFilm } from "#app/db/entities/flow-step-film.ts";
 import { FlowStep } from "#app/db/entities/flow-step.ts";
 import type { Flow } from "#app/db/entities/flow.ts";
 import { Silicon } from "#app/db/entities/silicon.ts";
+import { Tape } from "#app/db/entities/tape.ts";
 import { BLANK_HANDLING, completeStep } from "#app/lib/blank-step.ts";
 import type { FlowPlan, StepPlan } from "#app/schemas/flow-plan.ts";
 import type { StepValues } from "#app/schemas/flow.ts";
@@ -92,24 +93,26 @@ function stepPlan(step: FlowStep, films: FlowStepFilm[]): StepPlan {
     bondingMaterial: step.bondingMaterial?.id ?? null,
     bondThickness: step.bondThickness ?? null,
     groundFaceForce: step.groundFaceForce ?? null,
+    tape: step.tape?.id ?? null,
     handling: { ...BLANK_HANDLING, ...step.handling },
-    films: films.map(({ change, side, film, thickness, stress, coverage }) => ({
+    films: films.map(({ change, side, film, thickness, stress, coverage, lines }) => ({
       change,
       side,
       film: film.id,
       thickness: thickness ?? null,
       stress: stress ?? null,
       coverage: change === "adds" ? coverage : null,
+      lines: (change === "adds" && lines) || null,
     })),
   };
 }
 
 /** Of a film only what an addition has; a coverage left blank is all of the area. */
 const settled = (films: StepValues["films"]): StepValues["films"] =>
-  films.map(({ change, side, film, thickness, stress, coverage }) =>
+  films.map(({ change, side, film, thickness, stress, coverage, lines }) =>
     change === "adds"
-      ? { change, side, film, thickness, stress, coverage: coverage ?? 1 }
-      : { change, side, film, thickness: null, stress: null, coverage: null },
+      ? { change, side, film, thickness, stress, coverage: coverage ?? 1, lines: lines ?? null }
+      : { change, side, film, thickness: null, stress: null, coverage: null, lines: null },
   );
 
 /** Writes what differs between the plan that is stored and the one that is to be. */
@@ -152,7 +155,7 @@ async function required<Entity>(found: Promise<Entity | null>, what: string): Pr
 }
 
 async function stepColumns(em: EntityManager, values: StepValues) {
-  const { films: _films, equipment, carrier, bondingMaterial, ...columns } = values;
+  const { films: _films, equipment, carrier, bondingMaterial, tape, ...columns } = values;
   return {
     ...columns,
     equipment: equipment ? await required(em.findOne(Equipment, { id: equipment }), "tool") : null,
@@ -160,6 +163,7 @@ async function stepColumns(em: EntityManager, values: StepValues) {
     bondingMaterial: bondingMaterial
       ? await required(em.findOne(BondingMaterial, { id: bondingMaterial }), "bonding material")
       : null,
+    tape: tape ? await required(em.findOne(Tape, { id: tape }), "tape") : null,
   };
 }
 

@@ -65,6 +65,7 @@ export async function startFromStack(
       thickness: layer.thickness,
       stress: layer.ownStress,
       coverage: layer.coverage,
+      lines: layer.lines,
     })),
     tools: tools.map(({ id, name }) => ({ id, name })),
     bond,

@@ -3,7 +3,9 @@ import { CarrierUnit } from "#app/db/entities/carrier-unit.ts";
 import { Carrier } from "#app/db/entities/carrier.ts";
 import { Equipment } from "#app/db/entities/equipment.ts";
 import { Film } from "#app/db/entities/film.ts";
+import { Tape } from "#app/db/entities/tape.ts";
 import { formatQuantity } from "#app/engine/units/format.ts";
+import { curveRangeWords } from "#app/lib/expansion-rows.ts";
 import { formatMeasured } from "#app/lib/format-measured.ts";
 import { sentenceCase } from "#app/lib/assessment-steps.ts";
 import type { StepChoices } from "#app/lib/flow-step-choices.ts";
@@ -36,10 +38,12 @@ function toolWords(tool: Equipment): { short: string; words: string } {
   };
 }
 
-function carrierWords({ material, diameter, thickness, expansion, temperatureLimit }: Carrier): string {
+function carrierWords({ material, diameter, thickness, expansion, expansionCurve, temperatureLimit }: Carrier): string {
   const expands = expansion
     ? `expands ${formatMeasured(expansion, "expansion", { unit: "ppm/K" })}`
-    : "expands as silicon does";
+    : expansionCurve
+      ? `expands by its curve, ${curveRangeWords(expansionCurve)}`
+      : "expands as silicon does";
   return sentence([
     `${material === "glass" ? "Glass" : "Silicon"}, ${mm(diameter)}, ${um(thickness.value)}`,
     expands,
@@ -61,16 +65,27 @@ function materialWords(material: BondingMaterial): string {
   ]);
 }
 
+function tapeWords({ kind, temperatureLimit, embeddingDepth, handling }: Tape): string {
+  return sentence([
+    kind === "grinding tape" ? "Grinding tape" : "Dicing tape",
+    temperatureLimit ? `to ${celsius(temperatureLimit.value)}, ${temperatureLimit.source}` : null,
+    embeddingDepth && embeddingDepth.value > 0 ? `takes up bumps in ${um(embeddingDepth.value)}` : null,
+    handling.vacuum?.word === "resists" ? "goes into vacuum" : null,
+    handling.releasesInLight ? "ultraviolet light lets it go" : null,
+  ]);
+}
+
 /** Everything that a step's form offers, with what a person needs to know to choose. */
 export async function stepChoices(scope: ActorScope): Promise<StepChoices> {
   requireOnSite(scope, "see the library");
   const byName = { orderBy: { name: "asc" as const } };
-  const { films, tools, carriers, pieces, materials } = await inScope(scope, async (em) => ({
+  const { films, tools, carriers, pieces, materials, tapes } = await inScope(scope, async (em) => ({
     films: await em.find(Film, {}, { ...byName, fields: ["name", "stress"] }),
     tools: await em.find(Equipment, {}, byName),
     carriers: await em.find(Carrier, {}, byName),
     pieces: await em.find(CarrierUnit, {}, { orderBy: { mark: "asc" }, populate: ["carrier"] }),
     materials: await em.find(BondingMaterial, {}, byName),
+    tapes: await em.find(Tape, {}, byName),
   }));
   return {
     films: films.map(({ id, name, stress }) => ({
@@ -99,6 +114,7 @@ export async function stepChoices(scope: ActorScope): Promise<StepChoices> {
       name: material.name,
       words: materialWords(material),
     })),
+    tapes: tapes.map((tape) => ({ id: tape.id, name: tape.name, words: tapeWords(tape) })),
   };
 }
 

@@ -4,16 +4,18 @@ import { Carrier } from "#app/db/entities/carrier.ts";
 import { CarrierUnit } from "#app/db/entities/carrier-unit.ts";
 import { Equipment } from "#app/db/entities/equipment.ts";
 import { Film } from "#app/db/entities/film.ts";
+import { Tape } from "#app/db/entities/tape.ts";
 import { stressRecordOf } from "#app/lib/library-handling.ts";
 import type { StepPlan } from "#app/schemas/flow-plan.ts";
 import type { StepDetail, StepFilmDetail } from "#app/schemas/flow-view.ts";
-import { bondingMaterialInput, carrierInput, equipmentInput, filmInput, pieceInput } from "./flow-inputs.ts";
+import { bondingMaterialInput, carrierInput, equipmentInput, filmInput, pieceInput, tapeInput } from "./flow-inputs.ts";
 
 interface Library {
   tools: Map<string, Equipment>;
   carriers: Map<string, Carrier>;
   pieces: Map<string, CarrierUnit>;
   materials: Map<string, BondingMaterial>;
+  tapes: Map<string, Tape>;
   films: Map<string, Film>;
 }
 
@@ -28,6 +30,7 @@ async function usedLibrary(em: EntityManager, steps: StepPlan[]): Promise<Librar
     carriers: byId(await em.find(Carrier, named(steps.map(({ carrier }) => carrier)))),
     pieces: byId(await em.find(CarrierUnit, named(steps.map(({ handling }) => handling.carrierPiece)))),
     materials: byId(await em.find(BondingMaterial, named(steps.map(({ bondingMaterial }) => bondingMaterial)))),
+    tapes: byId(await em.find(Tape, named(steps.map(({ tape }) => tape)))),
     films: byId(await em.find(Film, named(steps.flatMap(({ films }) => films.map(({ film }) => film))))),
   };
 }
@@ -44,8 +47,8 @@ function pieceOf({ carrier, handling }: StepPlan, pieces: Library["pieces"]): Ca
   return piece && piece.carrier.id === carrier ? piece : null;
 }
 
-function stepDetail(step: StepPlan, { tools, carriers, pieces, materials, films }: Library): StepDetail {
-  const { equipment, carrier, bondingMaterial, films: changes, ...typed } = step;
+function stepDetail(step: StepPlan, { tools, carriers, pieces, materials, tapes, films }: Library): StepDetail {
+  const { equipment, carrier, bondingMaterial, tape, films: changes, ...typed } = step;
   const piece = pieceOf(step, pieces);
   const found = <Entity, Input>(id: string | null, map: Map<string, Entity>, toInput: (entity: Entity) => Input) => {
     const entity = id === null ? undefined : map.get(id);
@@ -56,7 +59,8 @@ function stepDetail(step: StepPlan, { tools, carriers, pieces, materials, films 
     equipment: found(equipment, tools, equipmentInput),
     carrier: found(carrier, carriers, (entity) => (piece ? pieceInput(entity, piece) : carrierInput(entity))),
     bondingMaterial: found(bondingMaterial, materials, bondingMaterialInput),
-    films: changes.flatMap(({ film: id, stress, thickness, coverage, ...change }): StepFilmDetail[] => {
+    tape: found(tape, tapes, tapeInput),
+    films: changes.flatMap(({ film: id, stress, thickness, coverage, lines, ...change }): StepFilmDetail[] => {
       const film = films.get(id);
       if (!film) return [];
       return [
@@ -68,6 +72,7 @@ function stepDetail(step: StepPlan, { tools, carriers, pieces, materials, films 
           stress: stress ?? film.stress,
           stressRecord: stress ? null : stressRecordOf(film),
           coverage: coverage ?? 1,
+          lines: lines ?? null,
         },
       ];
     }),

@@ -4,6 +4,7 @@ import { Carrier } from "#app/db/entities/carrier.ts";
 import { Equipment } from "#app/db/entities/equipment.ts";
 import { Film } from "#app/db/entities/film.ts";
 import { Silicon } from "#app/db/entities/silicon.ts";
+import { Tape } from "#app/db/entities/tape.ts";
 import type { SitePermission } from "#app/policies/permissions.ts";
 import type { LibraryKey, LibraryRecords } from "#app/schemas/library-records.ts";
 
@@ -86,6 +87,20 @@ export const LIBRARY = {
       class: (value) => (value === "flows" || value === "cross-linked" ? { flows: value === "flows" } : null),
       release: equals("release"),
     },
+  },
+  tape: {
+    entity: Tape,
+    what: "tape",
+    edit: "edit carriers, bonds and limits",
+    sorts: {
+      name: "lower(name)",
+      kind: "kind",
+      limit: byValue("temperature_limit"),
+      embedding: byValue("embedding_depth"),
+      thickness: byValue("thickness"),
+      time: byValue("longest_time"),
+    },
+    filters: { kind: equals("kind") },
   },
   equipment: {
     entity: Equipment,

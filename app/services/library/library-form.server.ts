@@ -6,6 +6,7 @@ import { equipmentSchema } from "#app/schemas/equipment.ts";
 import { filmSchema } from "#app/schemas/film.ts";
 import type { LibraryKey } from "#app/schemas/library-records.ts";
 import { siliconSchema } from "#app/schemas/silicon.ts";
+import { tapeSchema } from "#app/schemas/tape.ts";
 import { readForm, refusal, versionOf } from "#app/server/form.server.ts";
 import type { ActorScope } from "#app/server/scope.server.ts";
 import { requireOnSite } from "../permission.server.ts";
@@ -17,6 +18,7 @@ const SCHEMAS: Record<LibraryKey, z.ZodType<{ name: string }>> = {
   silicon: siliconSchema,
   carrier: carrierSchema,
   bondingMaterial: bondingMaterialSchema,
+  tape: tapeSchema,
   equipment: equipmentSchema,
 };
 

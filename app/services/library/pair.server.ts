@@ -9,7 +9,7 @@ import type { LibraryRecords } from "#app/schemas/library-records.ts";
 import { readQuantity } from "#app/lib/read-quantity.ts";
 import { RULES } from "#app/schemas/ranges.ts";
 import { inScope, type ActorScope } from "#app/server/scope.server.ts";
-import { bondingMaterialInput } from "../flows/flow-inputs.ts";
+import { bondingMaterialInput, carrierInput } from "../flows/flow-inputs.ts";
 import { readLimits } from "../limits.server.ts";
 
 type Carrier = LibraryRecords["carrier"];
@@ -61,7 +61,7 @@ export async function tryPair(scope: ActorScope, carrier: Carrier, search: URLSe
     const input: PairInput = {
       wafer: { name, diameter, orientation, thickness },
       siliconLeft: left.measured,
-      carrier,
+      carrier: carrierInput(carrier),
       material: bondingMaterialInput(material),
       bondThickness: assumed((material.leastThickness + material.mostThickness) / 2),
     };

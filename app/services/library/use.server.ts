@@ -15,7 +15,7 @@ interface Question {
 
 const use = (kind: LibraryUse["kind"], { id, name }: { id: string; name: string }): LibraryUse => ({ kind, id, name });
 
-const stepsWith = (column: "carrier" | "bondingMaterial" | "equipment") => {
+const stepsWith = (column: "carrier" | "bondingMaterial" | "tape" | "equipment") => {
   return async (em: EntityManager, { id, program }: Question): Promise<LibraryUse[]> => {
     const steps = await em.find(FlowStep, { [column]: id, program }, { populate: ["flow"] });
     return steps.map(({ flow }) => use("flow", flow));
@@ -35,6 +35,7 @@ const USES: Record<LibraryKey, (em: EntityManager, question: Question) => Promis
   },
   carrier: stepsWith("carrier"),
   bondingMaterial: stepsWith("bondingMaterial"),
+  tape: stepsWith("tape"),
   equipment: stepsWith("equipment"),
 };
 

@@ -38,6 +38,7 @@ const CARRIER: LibraryRecords["carrier"] = {
   expansionRange: "25 to 150 °C mean",
   meanExpansionFrom: null,
   meanExpansionTo: null,
+  expansionCurve: null,
   density: stated(2450),
   thicknessVariation: stated(1.5e-6),
   temperatureLimit: stated(673.15),

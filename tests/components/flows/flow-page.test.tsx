@@ -129,7 +129,7 @@ describe("the answer of a flow", () => {
 
   it("is the newest assessment, with the older ones beside it", () => {
     const markup = answer([assessment(2), assessment(1, { outcome: "do not run" })]);
-    expect(markup).toContain("Open assessment 2");
+    expect(markup).toContain("Open assessment B");
     expect(markup).toContain("Runs with cautions");
     expect(markup).toContain("Earlier assessments");
     expect(markup).toContain("Do not run");

@@ -39,6 +39,7 @@ const stepDetail = (step: StepInput, index: number, own: readonly string[]): Ste
   ...step,
   id: String(index),
   handling: BLANK_STEP.handling,
+  tape: null,
   trimWidth: null,
   trimDepth: null,
   carrier: step.bond?.carrier ?? null,
@@ -53,6 +54,7 @@ const stepDetail = (step: StepInput, index: number, own: readonly string[]): Ste
     stress,
     stressRecord: null,
     coverage,
+    lines: null,
   })),
 });
 

@@ -30,6 +30,49 @@ const SILICON_CARRIER: Sent = {
   passesUltraviolet: "",
 };
 
+describe("a carrier's curve", () => {
+  const CURVE = { "expansionCurve.rows": "20; 3\n300; 3.4", "expansionCurve.source": "supplier" };
+  const NO_MEAN = { "expansion.value": "", "expansion.tolerance": "", expansionRange: "" };
+
+  it("stands in place of the mean, with its own range and source", () => {
+    const { value, errors } = send(carrierSchema, {
+      ...GLASS,
+      ...NO_MEAN,
+      ...CURVE,
+      "expansionCurve.tolerance": "0.1 ppm/K",
+    });
+    expect(errors).toEqual({});
+    expect(value).toMatchObject({
+      expansion: null,
+      expansionRange: "curve, 20 to 300 °C",
+      expansionCurve: { source: "supplier", tolerance: expect.closeTo(1e-7, 12), note: "", on: null },
+    });
+  });
+
+  it("is left out when it is blank", () => {
+    expect(
+      send(carrierSchema, { ...GLASS, "expansionCurve.rows": "  ", "expansionCurve.source": "" }).value,
+    ).toMatchObject({
+      expansionCurve: null,
+    });
+  });
+
+  it.each([
+    [{ ...CURVE, "expansionCurve.rows": "20; 3\n300; x" }, "expansionCurve.rows", "Row 2: "],
+    [{ ...CURVE, "expansionCurve.source": "" }, "expansionCurve.source", "Say where the curve comes from"],
+    [{ "expansionCurve.tolerance": "0.1 ppm/K" }, "expansionCurve.rows", "Type the curve as well"],
+    [{ ...CURVE, "expansionCurve.tolerance": "0.1 ppm/K" }, "expansionCurve.tolerance", "clear one of the two"],
+    [{ ...CURVE, "expansionCurve.on": "1.2.2026" }, "expansionCurve.on", "Type the date as"],
+  ])("%j is refused at %s", (typed, field, says) => {
+    expect(send(carrierSchema, { ...GLASS, ...typed }).errors[field]?.[0]).toContain(says);
+  });
+
+  it("is silicon's own on silicon", () => {
+    const { errors } = send(carrierSchema, { ...SILICON_CARRIER, ...CURVE });
+    expect(errors["expansionCurve.rows"]?.[0]).toContain("the curve of silicon itself");
+  });
+});
+
 describe("a carrier's form", () => {
   it("is read in SI, with what was typed kept", () => {
     const { value, errors } = send(carrierSchema, GLASS);

@@ -106,7 +106,7 @@ describe("how a film comes onto the wafer", () => {
     expect(step).toMatchObject({ kind, equipment: tool, exposures, planned: "bare" });
     expect(celsius(step)).toBe(peak);
     expect(step.films).toEqual([
-      { change: "adds", side: "front", film: of.id, thickness: of.thickness, stress: null, coverage: 1 },
+      { change: "adds", side: "front", film: of.id, thickness: of.thickness, stress: null, coverage: 1, lines: null },
     ]);
   });
 
@@ -114,6 +114,10 @@ describe("how a film comes onto the wafer", () => {
     const step = only(film("metal", 5, { coverage: 0.35, stress: stated(200e6) }));
     expect(step.title).toBe("Plate Some metal, 5 µm, 35 %");
     expect(step.films[0]).toMatchObject({ coverage: 0.35, stress: { value: 200e6 } });
+    const lines = { width: 10e-6, direction: 0 };
+    const cut = only(film("metal", 5, { coverage: 0.35, lines }));
+    expect(cut.title).toBe("Plate Some metal, 5 µm, 35 % in lines 10 µm wide, along the notch axis");
+    expect(cut.films[0]).toMatchObject({ coverage: 0.35, lines });
   });
 
   it("leaves the tool open where the site has none of that name", () => {

@@ -180,8 +180,9 @@ describe("the text of a form", () => {
           thickness: measured(0.1 + 0.2 - 0.2999),
           ownStress: measured(-123.4e6),
           coverage: 0.123,
+          lines: { width: 10e-6, direction: Math.PI / 2 },
         },
-        { side: "front", filmId: POLYMER.id, thickness: measured(3.3e-6), ownStress: null, coverage: 1 },
+        { side: "front", filmId: POLYMER.id, thickness: measured(3.3e-6), ownStress: null, coverage: 1, lines: null },
       ],
     });
     const draft = stackDraft(text, CHOICES);
@@ -190,7 +191,10 @@ describe("the text of a form", () => {
     expect(draft.layers.map(({ film }) => film?.id)).toEqual([POLYMER.id, COPPER.id]);
     expect(draft.layers[1]?.thickness).toBeCloseTo(0.0001, 12);
     expect(draft.layers[1]?.stress?.value).toBeCloseTo(-123.4e6, 3);
-    expect(draft.layers[1]?.coverage).toBeCloseTo(0.123, 12);
+    expect(draft.layers[1]?.cut?.coverage).toBeCloseTo(0.123, 12);
+    expect(draft.layers[1]?.cut?.lines?.width).toBeCloseTo(10e-6, 15);
+    expect(draft.layers[1]?.cut?.lines?.direction).toBeCloseTo(Math.PI / 2, 10);
+    expect(draft.layers[0]?.cut).toEqual({ coverage: 1, lines: null });
   });
 
   it("says the same whatever else the form sends, and however it breaks its lines", () => {

@@ -120,6 +120,7 @@ describe("an answer", () => {
     expect(flat.shape).toEqual({
       regime: "linear",
       bow_m: 0,
+      across: null,
       warp_m: 0,
       roll_radius_m: null,
       stability_ratio: 0,

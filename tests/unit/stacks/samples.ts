@@ -29,11 +29,15 @@ export const WAFER: SiliconChoice = {
 };
 export const CHOICES: StackChoices = { films: [COPPER, POLYMER], silicon: [WAFER] };
 
+/** A form of before films could be cut in lines says it by the coverage alone. */
+const NOT_SAID = { cut: "", lineWidth: "", lineDirection: "" };
+
 export const layerText = (changes: Partial<LayerText>): LayerText => ({
   side: "front",
   film: COPPER.id,
   thickness: { value: "5 um", source: "measured here" },
   stress: {},
+  ...NOT_SAID,
   coverage: "100 %",
   ...changes,
 });

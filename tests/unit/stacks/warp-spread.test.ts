@@ -89,6 +89,7 @@ describe("in words", () => {
   const shape = {
     regime: "linear" as const,
     bow_m: -343e-6,
+    across: null,
     warp_m: 343e-6,
     roll_radius_m: null,
     stability_ratio: 0.1,

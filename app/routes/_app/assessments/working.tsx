@@ -2,6 +2,7 @@ import { Link } from "react-router";
 import { noBreak } from "#app/components/drawings/no-break.ts";
 import { PageHead } from "#app/components/layout/PageHead.tsx";
 import { WorkingView } from "#app/components/working/WorkingView.tsx";
+import { revisionLetters } from "#app/lib/assessment-revision.ts";
 import { figureAskedFor } from "#app/lib/assessment-working.ts";
 import { stepPath } from "#app/lib/step-path.ts";
 import { scopeOf } from "#app/server/contexts.server.ts";
@@ -30,7 +31,7 @@ export default function FigureWorking({ loaderData }: Route.ComponentProps) {
         crumbs={[
           { name: "Flows", path: "/flows" },
           { name: flow.name, path: `/flows/${flow.id}` },
-          { name: `Assessment ${number}`, path: `/assessments/${id}` },
+          { name: `Assessment ${revisionLetters(number)}`, path: `/assessments/${id}` },
           { name: `Step ${step.number}`, path: `/assessments/${id}${stepPath(step.number)}` },
         ]}
       />

@@ -86,7 +86,11 @@ export default function FlowTemplateRoute({ loaderData, actionData }: Route.Comp
               </div>
             </Form>
             <p className="text-quiet">
-              To change its steps, make a flow of it, change that, and keep the flow as a template again.
+              To change its steps,{" "}
+              <Link to={`/flows/new?template=${id}`} className="link">
+                make a flow from it
+              </Link>
+              , change that, press ‘Keep as template’ there and choose ‘In place of ‘{name}’’.
             </p>
             <details>
               <summary className="btn btn-remove list-none">Remove this template</summary>

@@ -54,15 +54,9 @@ export default function FlowRoute({ loaderData: flow, actionData }: Route.Compon
                     Name and wafer
                   </Link>
                   {flow.mayKeep && (
-                    <IntentForm
-                      intent="keep flow"
-                      action="/flows/library/flows"
-                      fields={{ flow: flow.id }}
-                      busy="Keeping"
-                      className="btn"
-                    >
+                    <Link to="keep" className="btn">
                       Keep as template
-                    </IntentForm>
+                    </Link>
                   )}
                   <IntentForm intent="copy" busy="Copying" className="btn">
                     Copy

@@ -9,7 +9,7 @@ import { mayOnSite } from "#app/policies/permissions.ts";
 import { scopeOf } from "#app/server/contexts.server.ts";
 import { postedForm } from "#app/server/form.server.ts";
 import { notFound, problem } from "#app/server/problem.server.ts";
-import { FLOW_TEMPLATE_SORTS, keepFlow, listFlowTemplates } from "#app/services/flows/flow-templates.server.ts";
+import { FLOW_TEMPLATE_SORTS, listFlowTemplates } from "#app/services/flows/flow-templates.server.ts";
 import { keepStep, listStepTemplates, STEP_TEMPLATE_SORTS } from "#app/services/flows/step-library.server.ts";
 import { idFrom } from "#app/services/uuid.server.ts";
 import type { Route } from "./+types/library";
@@ -30,14 +30,12 @@ export async function loader({ context, params, url }: Route.LoaderArgs) {
   return { kind: "steps" as const, page: await listStepTemplates(scope, list), mayEdit };
 }
 
-/** Keeps a flow, or a step of one, in the library. */
+/** Keeps a step of a flow in the library. */
 export async function action({ request, context }: Route.ActionArgs) {
   const scope = scopeOf(context);
   const formData = await postedForm(request);
   const flowId = idFrom(String(formData.get("flow") ?? ""), "flow");
   switch (formData.get("intent")) {
-    case "keep flow":
-      throw redirect(`/flows/library/flows/${await keepFlow(scope, flowId)}`);
     case "keep step":
       throw redirect(
         `/flows/library/steps/${await keepStep(scope, flowId, idFrom(String(formData.get("step") ?? ""), "step"))}`,

@@ -5,6 +5,7 @@ import { DataTable, type Column } from "#app/components/ui/DataTable.tsx";
 import { EmptyState } from "#app/components/ui/EmptyState.tsx";
 import { ListHead } from "#app/components/ui/ListHead.tsx";
 import { formatBare } from "#app/lib/format-measured.ts";
+import { revisionLetters } from "#app/lib/assessment-revision.ts";
 import { readListParams } from "#app/lib/list-params.ts";
 import { programsWhere } from "#app/policies/permissions.ts";
 import { scopeOf } from "#app/server/contexts.server.ts";
@@ -58,7 +59,7 @@ const columns: Column<Row>[] = [
       latest ? (
         <Link to={`/assessments/${latest.id}`} className="text-inherit">
           <FindingTag outcome={latest.outcome}>
-            no. {latest.number}, {latest.at.slice(0, 10)}
+            {revisionLetters(latest.number)}, {latest.at.slice(0, 10)}
           </FindingTag>
         </Link>
       ) : (
