@@ -83,13 +83,13 @@ test("the copy's plan comes to the very flow that the engine tried, for every ki
 }, 60_000);
 
 test("a remedy tried on a copy clears what it says, and leaves the flow as it is", async () => {
-  const { trialGround, remediesOf, tryOnCopy, getAssessment } = await services();
+  const { trialGround, trialQuestion, remediesOf, tryOnCopy, getAssessment } = await services();
   const scope = await scopeOfPerson(database, "engineer");
   const id = await assessed(scope, PETREL);
   const before = await asOwner(database, "select version from flow where name = ?", [PETREL]);
-  const answers = await remediesOf(await trialGround(scope, id));
-  const remedy = answers?.find(({ rule, step }) => rule === 2 && step === 10)?.remedies[0];
-  const { path } = await tryOnCopy(scope, id, JSON.stringify(remedy?.changes));
+  const found = await remediesOf(trialQuestion(await trialGround(scope, id)));
+  const remedy = found?.cards.find(({ clears }) => clears.some(({ rule, step }) => rule === 2 && step === 10));
+  const { path } = await tryOnCopy(scope, id, remedy?.posted ?? "");
   expect(path).toContain(`compare?with=${id}`);
   const copy = await getAssessment(scope, copyIn(path));
   expect(copy.result.verdict.outcome).toBe(remedy?.verdict);
