@@ -54,11 +54,12 @@ function rowsOf({ step, warps, beyond }: SampledStep, planned: FlowInput["steps"
 
 const signed = (value: number) => `edges ${value < 0 ? "down" : "up"} ${micrometres(Math.abs(value))}`;
 
-/** 'edges up 82 µm to 104 µm', from the smaller to the larger; from one way to the other where the band holds flat. */
+/** 'edges up 82 to 104 µm', from the smaller to the larger; from one way to the other where the band holds flat. */
 function band([low, high]: SampledWarp["band"]): string {
   if (low < 0 && high > 0) return `${signed(low)} to ${signed(high)}`;
-  const [near, far] = [Math.min(-low, -high), Math.max(-low, -high)];
-  return low < 0 ? `edges down ${micrometres(near)} to ${micrometres(far)}` : `${signed(low)} to ${micrometres(high)}`;
+  const [near, far] = [Math.min(Math.abs(low), Math.abs(high)), Math.max(Math.abs(low), Math.abs(high))];
+  const from = formatNumber(near * 1e6, { decimals: far < 1e-4 ? 1 : 0, trim: true });
+  return `edges ${low < 0 ? "down" : "up"} ${from} to ${micrometres(far)}`;
 }
 
 /** The moment at which most wafers are beyond a limit. */
@@ -69,8 +70,8 @@ function limitOf(beyond: readonly ShareBeyond[], edges: Edges): WafersRow["beyon
   if (!most) return [];
   const { probability } = most.chance;
   const some = probability > 0;
-  const share = some ? `${shareText(most)} ${most.when}` : "none";
-  return [{ limit: `edges ${edges}, ${micrometres(most.limit)}`, share, some }];
+  const share = some ? `${probability === 1 ? "all" : shareText(most)} ${most.when}` : "none";
+  return [{ limit: `${edges} ${micrometres(most.limit)}`, share, some }];
 }
 
 /** '3.2 ± 0.1 %'; to a hundredth near nothing and near all. */

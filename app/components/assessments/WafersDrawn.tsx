@@ -65,7 +65,7 @@ function Rows({ view: { rows, without } }: { view: WafersView }) {
               <th scope="col" className="max-tablet:hidden">
                 By first order
               </th>
-              <th scope="col">Beyond its tool’s limits</th>
+              <th scope="col">Beyond its tool’s limits, edges up or down</th>
             </tr>
           </thead>
           <tbody>
