@@ -28,7 +28,7 @@ const WIDE: Size = {
   width: 720,
   height: 440,
   inset: { left: 64, right: 16, top: 12, bottom: 44 },
-  text: 12.5,
+  text: 14,
   ticks: 6,
   named: true,
 };
@@ -38,7 +38,7 @@ const NARROW: Size = {
   width: 320,
   height: 320,
   inset: { left: 50, right: 12, top: 10, bottom: 26 },
-  text: 15,
+  text: 15.5,
   ticks: 3,
   named: false,
 };
@@ -62,6 +62,7 @@ export function WindowPlot({ names, ...props }: Props) {
 function Plot({ drawing: { x, y, runs, boundary, planned }, names, label, size }: Props & { size: Size }) {
   const id = useId();
   const { width, height, inset } = size;
+  const text = { fontSize: size.text, fill: colour("quiet") };
   const plot = { width: width - inset.left - inset.right, height: height - inset.top - inset.bottom };
   const [spanX, spanY] = [spanOf(x), spanOf(y)];
   const atX = (value: number) => inset.left + ((value - spanX.from) / (spanX.to - spanX.from)) * plot.width;
@@ -114,7 +115,7 @@ function Plot({ drawing: { x, y, runs, boundary, planned }, names, label, size }
         <path key={line(points)} d={line(points)} fill="none" stroke={colour("stop")} strokeWidth={2} />
       ))}
       <rect x={inset.left} y={inset.top} {...plot} fill="none" stroke={colour("ink")} />
-      <g fontSize={size.text} fill={colour("quiet")}>
+      <g>
         {ticksOf(spanX, size.ticks).map((tick) => (
           <g key={tick}>
             <line
@@ -124,7 +125,7 @@ function Plot({ drawing: { x, y, runs, boundary, planned }, names, label, size }
               y2={inset.top + plot.height + 4}
               stroke={colour("ink")}
             />
-            <text x={atX(tick)} y={inset.top + plot.height + 18} textAnchor="middle">
+            <text style={text} x={atX(tick)} y={inset.top + plot.height + 18} textAnchor="middle">
               {signedTick(tick)}
             </text>
           </g>
@@ -132,17 +133,21 @@ function Plot({ drawing: { x, y, runs, boundary, planned }, names, label, size }
         {ticksOf(spanY, size.ticks).map((tick) => (
           <g key={tick}>
             <line x1={inset.left - 4} x2={inset.left} y1={atY(tick)} y2={atY(tick)} stroke={colour("ink")} />
-            <text x={inset.left - 8} y={atY(tick) + 4} textAnchor="end">
+            <text style={text} x={inset.left - 8} y={atY(tick) + 4} textAnchor="end">
               {signedTick(tick)}
             </text>
           </g>
         ))}
         {size.named ? (
           <>
-            <text x={inset.left + plot.width / 2} y={height - 6} textAnchor="middle">
+            <text style={text} x={inset.left + plot.width / 2} y={height - 6} textAnchor="middle">
               {names.x}
             </text>
-            <text transform={`translate(14 ${inset.top + plot.height / 2}) rotate(-90)`} textAnchor="middle">
+            <text
+              style={text}
+              transform={`translate(14 ${inset.top + plot.height / 2}) rotate(-90)`}
+              textAnchor="middle"
+            >
               {names.y}
             </text>
           </>

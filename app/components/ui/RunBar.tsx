@@ -22,7 +22,7 @@ export function RunBar({ state, label, noun, done, begin, onStart, onStop, other
   const running = state.kind === "running";
   const said = saidOf(state, noun, done);
   const name = running ? "Stop" : state.kind === "idle" ? begin : "Start again";
-  if (!running && said === null && name !== begin) return null;
+  if (state.kind === "done" && said === null) return null;
   return (
     <div className="screen-only flex flex-wrap items-center gap-x-4 gap-y-2">
       {running ? <RunProgress done={state.done} of={state.of} label={label} /> : null}
