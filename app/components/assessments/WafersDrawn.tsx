@@ -65,7 +65,9 @@ function Rows({ view: { rows, without } }: { view: WafersView }) {
               <th scope="col" className="max-tablet:hidden">
                 By first order
               </th>
-              <th scope="col">Beyond its tool’s limits, edges up or down</th>
+              <th scope="col" className="max-tablet:hidden">
+                Beyond its tool’s limits, edges up or down
+              </th>
             </tr>
           </thead>
           <tbody>
@@ -101,15 +103,24 @@ function Row({ row: { step, title, when, planned, drawn, firstOrder, beyond } }:
       <td>
         {noBreak(drawn)}
         <span className="block text-label text-quiet tablet:hidden">first order: {noBreak(firstOrder)}</span>
+        <span className="block tablet:hidden">
+          <Limits beyond={beyond} />
+        </span>
       </td>
       <td className="text-quiet max-tablet:hidden">{noBreak(firstOrder)}</td>
-      <td>
-        {beyond.map(({ limit, share, some }) => (
-          <span key={limit} className={`block ${some ? "" : "text-quiet"}`}>
-            {noBreak(limit)}: {some ? <strong className="font-semibold">{noBreak(share)}</strong> : share}
-          </span>
-        ))}
+      <td className="max-tablet:hidden">
+        <Limits beyond={beyond} />
       </td>
     </tr>
   );
+}
+
+/** Shares beyond the limits of a step's tool; on a phone they stand under the band. */
+function Limits({ beyond }: Pick<WafersRow, "beyond">) {
+  return beyond.map(({ limit, share, some }) => (
+    <span key={limit} className={`block ${some ? "" : "text-quiet"}`}>
+      <span className="tablet:hidden">beyond </span>
+      {noBreak(limit)}: {some ? <strong className="font-semibold">{noBreak(share)}</strong> : share}
+    </span>
+  ));
 }

@@ -1,3 +1,4 @@
+import type { ReactNode } from "react";
 import { Link } from "react-router";
 import { FindingTag } from "#app/components/drawings/FindingTag.tsx";
 import { noBreak } from "#app/components/drawings/no-break.ts";
@@ -66,16 +67,12 @@ export function finderColumns(head: TrialHead): Column<FinderRow>[] {
 /** How it came out, and for what fits the way to try it. */
 function FinderFinding({ row, head }: { row: FinderRow; head: TrialHead }) {
   const { fits, outcome, tightest, reason, posted, carrier, material, thickness } = row;
-  if (!fits && reason)
-    return (
-      <>
-        <Misfit outcome={outcome} reason={reason} head={head} /> <RowWorking row={row} head={head} />
-      </>
-    );
+  const working = <RowWorking row={row} head={head} />;
+  if (!fits && reason) return <Misfit outcome={outcome} reason={reason} head={head} working={working} />;
   return (
     <div className="tablet:flex tablet:items-center tablet:justify-between tablet:gap-4">
       <FindingTag outcome={outcome} word={outcome === "clear" ? "Fits" : "Fits, with cautions"}>
-        {tightest ? `tightest at ${tightestWords(tightest)}` : undefined} <RowWorking row={row} head={head} />
+        {tightest ? `tightest at ${tightestWords(tightest)}` : undefined} {working}
       </FindingTag>
       {posted !== null && head.barred === null ? (
         <TryOnCopy
@@ -106,9 +103,10 @@ interface MisfitProps {
   outcome: FinderRow["outcome"];
   reason: NonNullable<FinderRow["reason"]>;
   head: TrialHead;
+  working: ReactNode;
 }
 
-function Misfit({ outcome, reason: { step, rule, text }, head }: MisfitProps) {
+function Misfit({ outcome, reason: { step, rule, text }, head, working }: MisfitProps) {
   const missed = rule === null && outcome !== "cannot judge";
   return (
     <>
@@ -118,7 +116,9 @@ function Misfit({ outcome, reason: { step, rule, text }, head }: MisfitProps) {
         </Link>
         {rule === null ? "" : `, rule ${rule}`}
       </FindingTag>
-      <span className="mt-0.5 block">{noBreak(text)}</span>
+      <span className="mt-0.5 block">
+        {noBreak(text)} {working}
+      </span>
     </>
   );
 }
