@@ -4,6 +4,9 @@ import { expect, expectNoAxeFindings, signIn, test } from "./support.ts";
 
 const PETREL = "Petrel P-3, on glass 7.2 ppm";
 const FULMAR = "Fulmar F-1 A, to 20 µm, slide adhesive";
+// Searches and windows are a second or two of work each, several of them in a test.
+test.slow();
+
 const DONE = "Every finding has been looked into.";
 
 async function openFlow(page: Page, name: string): Promise<void> {
