@@ -138,6 +138,7 @@ export { dieWarpWorking } from "./die/working.ts";
 
 // Flow in full: incoming shape, bonds that slide, expansion curves; inverse questions; calibration
 export { flowUncertainty, type FlowUncertainty } from "./flow/uncertainty.ts";
+export { sampledWarps, type SampledStep, type SampledWarp, type SampledWarps } from "./flow/sample-warps.ts";
 export { incomingFromBows } from "./flow/silicon.ts";
 export type { IncomingShape } from "./flow/model.ts";
 export { flowPoint, glassTransition, lockTemperature, type BondState } from "./flow/bond.ts";

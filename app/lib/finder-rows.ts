@@ -22,7 +22,7 @@ export function finderRow(tried: TriedBond, from: number): FinderRow {
     fits: misfit === null,
     outcome,
     margin: margin?.value ?? null,
-    tightest: margin && `step ${margin.finding.step}, rule ${margin.finding.rule}`,
+    tightest: margin && { step: margin.finding.step, rule: margin.finding.rule },
     reason: misfit && {
       step: misfit.step,
       rule: at?.rule ?? null,
@@ -35,6 +35,9 @@ export function finderRow(tried: TriedBond, from: number): FinderRow {
       : JSON.stringify([{ quantity: "bond", step: from, carrier: carrier.id, material: material.id, thickness }]),
   };
 }
+
+/** 'step 15, rule 2' */
+export const tightestWords = ({ step, rule }: NonNullable<FinderRow["tightest"]>) => `step ${step}, rule ${rule}`;
 
 /** What of the rows a search, a filter and a sort leave, in order. `rank` keeps the finder's own order: what fits first. */
 export function chosenRows(rows: readonly FinderRow[], { query, sort, descending, filters }: ListParams): FinderRow[] {
@@ -93,7 +96,7 @@ export function finderCsv(rows: readonly FinderRow[]): string {
     planned ? "yes" : "no",
     fits ? "yes" : "no",
     margin === null ? "" : Number(margin.toPrecision(6)),
-    tightest ?? "",
+    tightest ? tightestWords(tightest) : "",
     reason?.step ?? "",
     reason?.rule ?? "",
     reason?.text ?? "",

@@ -5,6 +5,7 @@ import type { FlowInput } from "#app/engine/flow/model.ts";
 import type { SiteLimits } from "#app/engine/rules/limits.ts";
 import { formatQuantity } from "#app/engine/units/format.ts";
 import type { Outcome } from "#app/engine/vocabulary.ts";
+import { refusalReason } from "./worker-run.ts";
 
 /** An assessment made in the browser: the engine's own, with its sentences; or why there is none. */
 export type Answer =
@@ -17,10 +18,30 @@ export function answerOf(input: FlowInput, limits: SiteLimits): Answer {
     return { computed: true, assessment, sentences: answerSentences(input, assessment) };
   } catch (error) {
     if (!(error instanceof EngineInputError)) throw error;
-    const step = /^steps\[(\d+)\]/.exec(error.field)?.[1];
-    const place = step === undefined ? "" : `Step ${Number(step) + 1}: `;
-    return { computed: false, reason: `${place}${error.reason}.` };
+    return { computed: false, reason: refusalReason(error) };
   }
+}
+
+/** What of an answer a pane shows: little enough to be sent from a worker after every key. */
+export type ToldAnswer =
+  | {
+      computed: true;
+      outcome: Outcome;
+      /** where the verdict arises first; null when it is clear */
+      step: number | null;
+      sentences: string[];
+      /** steps that come out otherwise than in the flow as it is; null where that one cannot be computed */
+      changed: StepChange[] | null;
+    }
+  | { computed: false; reason: string };
+
+/** An answer as a pane shows it, beside that to the flow as it is. */
+export function toldAnswer(answer: Answer, present: Answer): ToldAnswer {
+  if (!answer.computed) return answer;
+  const { assessment, sentences } = answer;
+  const { outcome, step } = assessment.verdict;
+  const changed = present.computed ? changedSteps(present.assessment, assessment) : null;
+  return { computed: true, outcome, step, sentences, changed };
 }
 
 /** How the wafer lies after a step, in words; a curled one has a radius, never a bow. */

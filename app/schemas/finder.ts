@@ -14,8 +14,8 @@ export interface FinderRow {
   outcome: Outcome;
   /** share of a limit left at the tightest finding; null where nothing judged has a limit */
   margin: number | null;
-  /** 'step 15, rule 2' of the tightest finding */
-  tightest: string | null;
+  /** where the tightest finding is */
+  tightest: { step: number; rule: number } | null;
   /** of what does not fit: the first reason */
   reason: { step: number; rule: number | null; text: string; figure: string | null; limit: string | null } | null;
   /** what is posted to try it; null for what is planned already */

@@ -1,4 +1,6 @@
 import type { ContourPoint } from "#app/engine/window/contours.ts";
+import type { FlowInput } from "#app/engine/flow/model.ts";
+import type { SiteLimits } from "#app/engine/rules/limits.ts";
 import type { Outcome } from "#app/engine/vocabulary.ts";
 import type { TrialHead } from "./trial.ts";
 
@@ -56,4 +58,26 @@ export interface WindowPageData {
   /** why nothing is drawn, where no field is at fault */
   fault: string | null;
   drawing: WindowDrawing | null;
+}
+
+/** One side of a window as the engine is asked: which input, and its range, SI. */
+export interface WindowSide {
+  input: string;
+  from: number;
+  to: number;
+}
+
+/** What the engine needs to work a window out, wherever it runs. */
+export interface WindowQuestion {
+  flow: FlowInput;
+  limits: SiteLimits;
+  x: WindowSide;
+  y: WindowSide;
+  step: number | null;
+}
+
+/** A window as it is asked, on its way to the browser: its page without a drawing, and what to draw; null while there is nothing to. */
+export interface SentWindow {
+  page: WindowPageData;
+  question: WindowQuestion | null;
 }

@@ -83,15 +83,16 @@ test("the copy's plan comes to the very flow that the engine tried, for every ki
 }, 60_000);
 
 test("a remedy tried on a copy clears what it says, and leaves the flow as it is", async () => {
-  const { trialGround, remediesOf, tryOnCopy, getAssessment } = await services();
+  const { trialGround, trialQuestion, remediesOf, tryOnCopy, getAssessment } = await services();
   const scope = await scopeOfPerson(database, "engineer");
   const id = await assessed(scope, PETREL);
   const before = await asOwner(database, "select version from flow where name = ?", [PETREL]);
   const ground = await trialGround(scope, id);
-  const remedy = (await remediesOf(ground))?.find(({ rule, step }) => rule === 2 && step === 10)?.remedies[0];
-  const [change] = remedy?.changes ?? [];
-  const chosen = ground.catalogue.carriers.find(({ id }) => change?.quantity === "bond" && id === change.carrier);
-  const { path } = await tryOnCopy(scope, id, JSON.stringify(remedy?.changes));
+  const found = await remediesOf(trialQuestion(ground));
+  const remedy = found?.cards.find(({ clears }) => clears.some(({ rule, step }) => rule === 2 && step === 10));
+  const posted = remedy?.posted ?? "";
+  const chosen = ground.catalogue.carriers.find((carrier) => posted.includes(carrier.id));
+  const { path } = await tryOnCopy(scope, id, posted);
   expect(path).toContain(`compare?with=${id}`);
   const copy = await getAssessment(scope, copyIn(path));
   expect(copy.result.verdict.outcome).toBe(remedy?.verdict);

@@ -15,6 +15,7 @@ import { SidePane } from "./SidePane.tsx";
 import { StepLink } from "./StepLink.tsx";
 import { StepList } from "./StepList.tsx";
 import { StepTable } from "./StepTable.tsx";
+import { WafersDrawn } from "./WafersDrawn.tsx";
 import { useStepSelection } from "./use-step-selection.ts";
 
 interface Props {
@@ -63,6 +64,7 @@ export function AssessmentPage({ view, changed, refused }: Props) {
           <SidePane view={view} />
         </div>
         <FlowCourse course={view.course} selected={selected?.number} />
+        {head.mayAssess ? <WafersDrawn key={head.id} assessmentId={head.id} /> : null}
       </article>
       <section className="mt-6" aria-labelledby="cautions">
         <h2 id="cautions" className="mb-2 font-semibold">

@@ -1,21 +1,28 @@
+import { useEffect } from "react";
 import { Link } from "react-router";
 import { FindingTag } from "#app/components/drawings/FindingTag.tsx";
 import { noBreak } from "#app/components/drawings/no-break.ts";
 import { PageHead } from "#app/components/layout/PageHead.tsx";
 import { EmptyState } from "#app/components/ui/EmptyState.tsx";
+import { RunBar } from "#app/components/ui/RunBar.tsx";
+import { useInBrowser } from "#app/components/ui/use-in-browser.ts";
+import { BY_SERVER, readSent } from "#app/lib/read-sent.ts";
 import type { RemediesView, UnclearedView } from "#app/lib/remedies-view.ts";
-import type { TrialHead } from "#app/schemas/trial.ts";
+import type { SentTrial, TrialHead, TrialQuestion } from "#app/schemas/trial.ts";
 import { RemedyCards } from "./RemedyCards.tsx";
 import { TrialBarred } from "./TrialBarred.tsx";
+import { useFlowRun } from "./use-flow-run.ts";
 
-interface Props {
+export interface RemediesPageData {
   head: TrialHead;
-  /** null when today's engine cannot compute the inputs */
-  view: RemediesView | null;
+  /** what the server has found: null when today's engine cannot compute the inputs, undefined when it was not asked */
+  view?: RemediesView | null;
+  /** what there is to look for changes in, where the browser does */
+  question?: TrialQuestion;
 }
 
 /** The smallest changes that clear an assessment, each to be tried on a copy; and what no change of one quantity clears. */
-export function RemediesPage({ head, view }: Props) {
+export function RemediesPage({ head, view, question }: RemediesPageData) {
   return (
     <>
       <PageHead
@@ -27,7 +34,40 @@ export function RemediesPage({ head, view }: Props) {
         ]}
       />
       <TrialBarred head={head} />
-      {view ? <Found head={head} view={view} /> : <Nothing head={head} />}
+      {view === null ? <Nothing head={head} /> : <Searched key={head.id} head={head} view={view} question={question} />}
+    </>
+  );
+}
+
+/** The search in the browser, or what the server has found and the same search once more. */
+function Searched({ head, view, question }: RemediesPageData & { view: RemediesView | undefined }) {
+  const scripted = useInBrowser();
+  const { state, run, stop } = useFlowRun<RemediesView>("remedies", view && { kind: "done", found: view });
+  const ask = () => readSent<SentTrial>(`/assessments/${head.id}/trial`).then((sent) => sent.question);
+  useEffect(() => {
+    if (question) run(question);
+  }, [question, run]);
+  const { found } = state;
+  return (
+    <>
+      {scripted && head.mayAssess ? (
+        <div className="mb-4">
+          <RunBar
+            state={state}
+            label="Findings looked into"
+            noun="findings"
+            done="Every finding has been looked into."
+            onStart={() => run(ask())}
+            onStop={stop}
+            otherwise={
+              <Link to={`/assessments/${head.id}/remedies?${BY_SERVER}`} className="link">
+                Let the server look
+              </Link>
+            }
+          />
+        </div>
+      ) : null}
+      {found ? <Found head={head} view={found} whole={state.kind === "done"} /> : null}
     </>
   );
 }
@@ -47,8 +87,15 @@ function Nothing({ head }: { head: TrialHead }) {
   );
 }
 
-function Found({ head, view: { cards, uncleared } }: { head: TrialHead; view: RemediesView }) {
-  if (cards.length === 0 && uncleared.length === 0)
+interface FoundProps {
+  head: TrialHead;
+  view: RemediesView;
+  /** false while more may be found */
+  whole: boolean;
+}
+
+function Found({ head, view: { cards, uncleared }, whole }: FoundProps) {
+  if (cards.length === 0 && uncleared.length === 0 && whole)
     return (
       <EmptyState
         title="Nothing to clear"

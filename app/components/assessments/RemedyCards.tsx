@@ -3,8 +3,10 @@ import { noBreak } from "#app/components/drawings/no-break.ts";
 import { changePhrase, lowerFirst } from "#app/lib/change-phrase.ts";
 import type { PlaceView, RemedyCard } from "#app/lib/remedies-view.ts";
 import { stepsInWords } from "#app/lib/step-numbers.ts";
+import { triedPath } from "#app/lib/tried-path.ts";
 import type { TrialHead } from "#app/schemas/trial.ts";
 import { TryOnCopy } from "./TryOnCopy.tsx";
+import { WorkingLink } from "./WorkingLink.tsx";
 
 interface Props {
   cards: readonly RemedyCard[];
@@ -24,6 +26,12 @@ export function RemedyCards({ cards, head, across = false }: Props) {
         >
           <div>
             <RemedyText card={card} />
+            <p className="screen-only">
+              <WorkingLink
+                path={triedPath(head.id, card.posted, card.clears[0] ?? card.eases[0])}
+                of={card.changes.map(changePhrase).join("; ")}
+              />
+            </p>
           </div>
           {head.barred === null ? (
             <div className={across ? "max-tablet:mt-2 tablet:shrink-0" : "mt-2"}>

@@ -17,7 +17,7 @@ export function SidePane({ view }: { view: AssessmentView }) {
     <div className="flex flex-col max-wide:border-t max-wide:border-ink wide:border-l wide:border-ink">
       <div className="divide-y divide-line max-wide:tablet:grid max-wide:tablet:grid-cols-2 max-wide:tablet:divide-y-0">
         <PaneSection title="What clears it">
-          {remedies.length > 0 ? <SmallestChanges assessmentId={view.head.id} /> : null}
+          {remedies.length > 0 ? <SmallestChanges assessmentId={view.head.id} mayAssess={view.head.mayAssess} /> : null}
           <RemedyList remedies={remedies} />
         </PaneSection>
         {selected ? <Budget step={selected} /> : null}

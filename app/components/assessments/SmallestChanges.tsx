@@ -1,39 +1,109 @@
-import { useEffect } from "react";
+import { useCallback, useEffect, useState, type ReactNode } from "react";
 import { Link, useFetcher } from "react-router";
-import type { RemediesView } from "#app/lib/remedies-view.ts";
-import type { TrialHead } from "#app/schemas/trial.ts";
+import { RunBar } from "#app/components/ui/RunBar.tsx";
+import { BY_SERVER, readSent } from "#app/lib/read-sent.ts";
+import type { RemediesView, RemedyCard } from "#app/lib/remedies-view.ts";
+import type { SentTrial, TrialHead } from "#app/schemas/trial.ts";
 import { RemedyCards } from "./RemedyCards.tsx";
+import type { RemediesPageData } from "./RemediesPage.tsx";
+import { useFlowRun } from "./use-flow-run.ts";
 
 /** More are on their own page. */
 const SHOWN = 3;
 
-/** The smallest changes that clear an assessment, looked for once the page is there. Without scripts the link alone leads to them. */
-export function SmallestChanges({ assessmentId }: { assessmentId: string }) {
-  const { load, data, state } = useFetcher<{ head: TrialHead; view: RemediesView | null }>({
-    key: `remedies ${assessmentId}`,
-  });
-  const path = `/assessments/${assessmentId}/remedies`;
+/**
+ * The smallest changes that clear an assessment, looked for once the page is there: in the browser by whoever may have the inputs, by
+ * the server for everybody else. Without scripts the link alone leads to them.
+ */
+export function SmallestChanges({ assessmentId, mayAssess }: { assessmentId: string; mayAssess: boolean }) {
+  return mayAssess ? <LookedForHere assessmentId={assessmentId} /> : <LookedForThere assessmentId={assessmentId} />;
+}
+
+function LookedForHere({ assessmentId }: { assessmentId: string }) {
+  const { state, run, stop } = useFlowRun<RemediesView>("remedies");
+  const [barred, setBarred] = useState<TrialHead["barred"]>("role");
+  const look = useCallback(() => {
+    const ask = async () => {
+      const { head, question } = await readSent<SentTrial>(`/assessments/${assessmentId}/trial`);
+      setBarred(head.barred);
+      return question;
+    };
+    run(ask());
+  }, [assessmentId, run]);
+  useEffect(look, [look]);
+  const bar = (
+    <RunBar
+      state={state}
+      label="Findings looked into"
+      noun="findings"
+      onStart={look}
+      onStop={stop}
+      otherwise={
+        <Link to={`/assessments/${assessmentId}/remedies?${BY_SERVER}`} className="link">
+          Let the server look
+        </Link>
+      }
+    />
+  );
+  return (
+    <Shown
+      assessmentId={assessmentId}
+      query=""
+      cards={state.found?.cards ?? []}
+      barred={barred}
+      none={state.kind === "done"}
+      above={bar}
+    />
+  );
+}
+
+function LookedForThere({ assessmentId }: { assessmentId: string }) {
+  const { load, data, state } = useFetcher<RemediesPageData>({ key: `remedies ${assessmentId}` });
+  const path = `/assessments/${assessmentId}/remedies?${BY_SERVER}`;
   useEffect(() => {
     void load(path);
   }, [load, path]);
-  const cards = data?.view?.cards ?? [];
+  const waiting = (
+    <p className="screen-only text-quiet" role="status">
+      {state === "loading" && !data ? "Trying one change after another" : ""}
+    </p>
+  );
   return (
-    <div className="mb-3 border-b border-line pb-3" aria-busy={state !== "idle"}>
-      {data ? (
-        cards.length > 0 ? (
-          <RemedyCards cards={cards.slice(0, SHOWN)} head={data.head} />
-        ) : (
-          <p className="text-quiet">No change of a single quantity clears any of it.</p>
-        )
-      ) : (
-        <p className="screen-only text-quiet" role="status">
-          {state === "loading" ? "Trying one change after another…" : ""}
-        </p>
-      )}
-      <Link to={path} className="link screen-only">
+    <Shown
+      assessmentId={assessmentId}
+      query={`?${BY_SERVER}`}
+      cards={data?.view?.cards ?? []}
+      barred={data?.head.barred ?? "role"}
+      none={data !== undefined}
+      above={waiting}
+    />
+  );
+}
+
+interface ShownProps {
+  assessmentId: string;
+  /** how the pages are asked for that the links lead to */
+  query: string;
+  cards: readonly RemedyCard[];
+  barred: TrialHead["barred"];
+  /** whether the search is over, so that no card means that there is none */
+  none: boolean;
+  above: ReactNode;
+}
+
+function Shown({ assessmentId, query, cards, barred, none, above }: ShownProps) {
+  return (
+    <div className="mb-3 space-y-2 border-b border-line pb-3">
+      {above}
+      {cards.length > 0 ? (
+        <RemedyCards cards={cards.slice(0, SHOWN)} head={{ id: assessmentId, barred }} />
+      ) : none ? (
+        <p className="text-quiet">No change of a single quantity clears any of it.</p>
+      ) : null}
+      <Link to={`/assessments/${assessmentId}/remedies${query}`} className="link screen-only block w-fit">
         {cards.length > SHOWN ? `All ${cards.length} changes that clear something` : "Smallest changes that clear it"}
       </Link>
-      <Link to={`/assessments/${assessmentId}/window`} className="link screen-only mt-1 block w-fit">
+      <Link to={`/assessments/${assessmentId}/window${query}`} className="link screen-only block w-fit">
         Process window over two inputs
       </Link>
     </div>

@@ -1,20 +1,24 @@
 import { Form, useNavigation } from "react-router";
-import { FindingTag } from "#app/components/drawings/FindingTag.tsx";
 import { PageHead } from "#app/components/layout/PageHead.tsx";
 import { EmptyState } from "#app/components/ui/EmptyState.tsx";
 import { Notice } from "#app/components/ui/Notice.tsx";
 import { SelectField } from "#app/components/ui/SelectField.tsx";
 import { TextField } from "#app/components/ui/TextField.tsx";
-import type { Outcome } from "#app/engine/vocabulary.ts";
-import type { AskedAxis, WindowInput, WindowPageData } from "#app/schemas/process-window.ts";
-import { WindowPlot } from "./WindowPlot.tsx";
-import { WindowTable } from "./WindowTable.tsx";
+import { BY_SERVER } from "#app/lib/read-sent.ts";
+import type { AskedAxis, SentWindow, WindowInput, WindowPageData } from "#app/schemas/process-window.ts";
+import { WindowDrawn } from "./WindowDrawn.tsx";
+
+interface WindowPageProps {
+  page: WindowPageData;
+  /** what there is to draw, where the browser does; otherwise the page has what the server has drawn */
+  question?: SentWindow["question"];
+}
 
 /** The verdict of a flow over two of its inputs: where it runs, and how far what is planned stands from where it does not. */
-export function WindowPage({ page }: { page: WindowPageData }) {
-  const { head, inputs, steps, step, x, y, fault, drawing } = page;
+export function WindowPage({ page, question = null }: WindowPageProps) {
+  const { head, inputs, steps, step, x, y, fault } = page;
   const working = useNavigation().state === "loading";
-  const [alongX, alongY] = [x, y].map(({ input }) => inputs.find(({ key }) => key === input) ?? null);
+  const asked = JSON.stringify([x, y, step]);
   return (
     <>
       <PageHead
@@ -25,7 +29,7 @@ export function WindowPage({ page }: { page: WindowPageData }) {
           { name: `Assessment, revision ${head.revision}`, path: `/assessments/${head.id}` },
         ]}
       />
-      <Form method="get" className="screen-only mb-4 max-w-280" key={JSON.stringify([x, y, step])}>
+      <Form method="get" className="screen-only mb-4 max-w-280" key={asked}>
         <AxisFields name="x" label="Along" axis={x} inputs={inputs} />
         <AxisFields name="y" label="Upwards" axis={y} inputs={inputs} />
         <SelectField
@@ -36,6 +40,7 @@ export function WindowPage({ page }: { page: WindowPageData }) {
           defaultValue={step === null ? "" : String(step)}
           className="w-120 max-w-full min-w-0"
         />
+        {head.mayAssess ? null : <ByServer />}
         <button type="submit" className="btn btn-primary mt-2" disabled={working}>
           {working ? "Walking the flow" : "Draw"}
         </button>
@@ -45,28 +50,8 @@ export function WindowPage({ page }: { page: WindowPageData }) {
           {fault}
         </Notice>
       ) : null}
-      {drawing && alongX && alongY ? (
-        <article className="frame p-4 tablet:p-6" aria-busy={working}>
-          <WindowPlot
-            drawing={drawing}
-            names={{ x: nameOf(alongX), y: nameOf(alongY) }}
-            label={`Verdict over ${nameOf(alongX)} and ${nameOf(alongY)}; the table below says the same in words`}
-          />
-          <ul className="mt-3 flex flex-wrap gap-x-6 gap-y-1" aria-label="Key">
-            {[...new Set(drawing.runs.map(({ outcome }): Outcome => outcome))].map((outcome) => (
-              <li key={outcome}>
-                <FindingTag outcome={outcome} />
-              </li>
-            ))}
-            <li className="text-quiet">Line: from there on it does not run</li>
-            {drawing.planned ? <li className="text-quiet">Ring: as planned</li> : null}
-          </ul>
-          <WindowTable drawing={drawing} x={alongX} y={alongY} />
-          <p className="mt-3 max-w-160 text-label text-quiet">
-            {drawing.walks} places were walked with all rules at nominal values; the others lie between places that
-            agree. An island smaller than four cells of the grid can be missed.
-          </p>
-        </article>
+      {question || page.drawing ? (
+        <WindowDrawn key={asked} page={page} question={question} waiting={working} />
       ) : fault === null && !(x.input && y.input) ? (
         <EmptyState title="Choose two inputs">
           {inputs.length < 2
@@ -78,7 +63,11 @@ export function WindowPage({ page }: { page: WindowPageData }) {
   );
 }
 
-const nameOf = ({ label, unit }: WindowInput) => `${label.split(":")[0] ?? label}, ${unit}`;
+/** Who may not have the inputs has the server work it out. */
+function ByServer() {
+  const [name, value] = BY_SERVER.split("=");
+  return <input type="hidden" name={name} value={value} />;
+}
 
 interface AxisProps {
   name: "x" | "y";

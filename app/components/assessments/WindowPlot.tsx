@@ -13,19 +13,61 @@ interface Props {
   label: string;
 }
 
-const WIDTH = 720;
-const HEIGHT = 440;
-const INSET = { left: 64, right: 16, top: 12, bottom: 44 };
-const TICKS = 6;
+/** A drawing for a width of screen; text is in its own units, which come out as pixels or more down to the narrowest screen. */
+interface Size {
+  width: number;
+  height: number;
+  inset: { left: number; right: number; top: number; bottom: number };
+  text: number;
+  ticks: number;
+  /** whether the names of the axes stand beside them; else the drawing's surroundings say them */
+  named: boolean;
+}
+
+const WIDE: Size = {
+  width: 720,
+  height: 440,
+  inset: { left: 64, right: 16, top: 12, bottom: 44 },
+  text: 14,
+  ticks: 6,
+  named: true,
+};
+
+/** Shown 256 px wide on the narrowest phone. */
+const NARROW: Size = {
+  width: 320,
+  height: 320,
+  inset: { left: 50, right: 12, top: 10, bottom: 26 },
+  text: 15.5,
+  ticks: 3,
+  named: false,
+};
 
 /** The verdict over two inputs: hatched by outcome, the line beyond which it does not run, and what is planned. */
-export function WindowPlot({ drawing: { x, y, runs, boundary, planned }, names, label }: Props) {
+export function WindowPlot({ names, ...props }: Props) {
+  return (
+    <>
+      <div className="max-tablet:hidden">
+        <Plot size={WIDE} names={names} {...props} />
+      </div>
+      <div className="max-w-90 tablet:hidden">
+        <p className="text-quiet">Upwards: {names.y}</p>
+        <Plot size={NARROW} names={names} {...props} />
+        <p className="text-right text-quiet">Along: {names.x}</p>
+      </div>
+    </>
+  );
+}
+
+function Plot({ drawing: { x, y, runs, boundary, planned }, names, label, size }: Props & { size: Size }) {
   const id = useId();
-  const plot = { width: WIDTH - INSET.left - INSET.right, height: HEIGHT - INSET.top - INSET.bottom };
+  const { width, height, inset } = size;
+  const text = { fontSize: size.text, fill: colour("quiet") };
+  const plot = { width: width - inset.left - inset.right, height: height - inset.top - inset.bottom };
   const [spanX, spanY] = [spanOf(x), spanOf(y)];
-  const atX = (value: number) => INSET.left + ((value - spanX.from) / (spanX.to - spanX.from)) * plot.width;
+  const atX = (value: number) => inset.left + ((value - spanX.from) / (spanX.to - spanX.from)) * plot.width;
   const atY = (value: number) =>
-    INSET.top + plot.height - ((value - spanY.from) / (spanY.to - spanY.from)) * plot.height;
+    inset.top + plot.height - ((value - spanY.from) / (spanY.to - spanY.from)) * plot.height;
   // A place of the grid stands for half a cell to either side of it.
   const cell = { width: plot.width / (x.length - 1), height: plot.height / (y.length - 1) };
   const outcomes = [...new Set(runs.map(({ outcome }) => outcome))];
@@ -33,9 +75,9 @@ export function WindowPlot({ drawing: { x, y, runs, boundary, planned }, names, 
   const line = (points: readonly { x: number; y: number }[]) =>
     points.map((point, index) => `${index === 0 ? "M" : "L"}${atX(point.x)} ${atY(point.y)}`).join("");
   return (
-    <svg viewBox={`0 0 ${WIDTH} ${HEIGHT}`} className="h-auto w-full max-w-220" role="img" aria-label={label}>
+    <svg viewBox={`0 0 ${width} ${height}`} className="h-auto w-full max-w-220" role="img" aria-label={label}>
       <clipPath id={`${id}-plot`}>
-        <rect x={INSET.left} y={INSET.top} {...plot} />
+        <rect x={inset.left} y={inset.top} {...plot} />
       </clipPath>
       {outcomes.map((outcome) => {
         const style = HATCH_STYLES[OUTCOME_SIGNS[outcome].level];
@@ -47,8 +89,8 @@ export function WindowPlot({ drawing: { x, y, runs, boundary, planned }, names, 
                 .map(({ row, from, to }) => (
                   <rect
                     key={`${row} ${from}`}
-                    x={INSET.left + (from - 0.5) * cell.width}
-                    y={INSET.top + plot.height - (row + 0.5) * cell.height}
+                    x={inset.left + (from - 0.5) * cell.width}
+                    y={inset.top + plot.height - (row + 0.5) * cell.height}
                     width={(to - from + 1) * cell.width}
                     // A hair of overlap: rows that only touch leave seams in the hatch.
                     height={cell.height + 0.5}
@@ -58,7 +100,7 @@ export function WindowPlot({ drawing: { x, y, runs, boundary, planned }, names, 
             {style.pitch === null ? null : (
               <g clipPath={`url(#${clip(outcome)})`}>
                 <path
-                  transform={`translate(${INSET.left} ${INSET.top})`}
+                  transform={`translate(${inset.left} ${inset.top})`}
                   d={hatchPath(plot.width, plot.height, style.pitch, style.crossed)}
                   fill="none"
                   stroke={colour(style.colour)}
@@ -72,36 +114,44 @@ export function WindowPlot({ drawing: { x, y, runs, boundary, planned }, names, 
       {boundary.map((points) => (
         <path key={line(points)} d={line(points)} fill="none" stroke={colour("stop")} strokeWidth={2} />
       ))}
-      <rect x={INSET.left} y={INSET.top} {...plot} fill="none" stroke={colour("ink")} />
-      <g fontSize={12.5} fill={colour("quiet")}>
-        {ticksOf(spanX).map((tick) => (
+      <rect x={inset.left} y={inset.top} {...plot} fill="none" stroke={colour("ink")} />
+      <g>
+        {ticksOf(spanX, size.ticks).map((tick) => (
           <g key={tick}>
             <line
               x1={atX(tick)}
               x2={atX(tick)}
-              y1={INSET.top + plot.height}
-              y2={INSET.top + plot.height + 4}
+              y1={inset.top + plot.height}
+              y2={inset.top + plot.height + 4}
               stroke={colour("ink")}
             />
-            <text x={atX(tick)} y={INSET.top + plot.height + 18} textAnchor="middle">
+            <text style={text} x={atX(tick)} y={inset.top + plot.height + 18} textAnchor="middle">
               {signedTick(tick)}
             </text>
           </g>
         ))}
-        {ticksOf(spanY).map((tick) => (
+        {ticksOf(spanY, size.ticks).map((tick) => (
           <g key={tick}>
-            <line x1={INSET.left - 4} x2={INSET.left} y1={atY(tick)} y2={atY(tick)} stroke={colour("ink")} />
-            <text x={INSET.left - 8} y={atY(tick) + 4} textAnchor="end">
+            <line x1={inset.left - 4} x2={inset.left} y1={atY(tick)} y2={atY(tick)} stroke={colour("ink")} />
+            <text style={text} x={inset.left - 8} y={atY(tick) + 4} textAnchor="end">
               {signedTick(tick)}
             </text>
           </g>
         ))}
-        <text x={INSET.left + plot.width / 2} y={HEIGHT - 6} textAnchor="middle">
-          {names.x}
-        </text>
-        <text transform={`translate(14 ${INSET.top + plot.height / 2}) rotate(-90)`} textAnchor="middle">
-          {names.y}
-        </text>
+        {size.named ? (
+          <>
+            <text style={text} x={inset.left + plot.width / 2} y={height - 6} textAnchor="middle">
+              {names.x}
+            </text>
+            <text
+              style={text}
+              transform={`translate(14 ${inset.top + plot.height / 2}) rotate(-90)`}
+              textAnchor="middle"
+            >
+              {names.y}
+            </text>
+          </>
+        ) : null}
       </g>
       {planned ? (
         <g>
@@ -122,6 +172,6 @@ export function WindowPlot({ drawing: { x, y, runs, boundary, planned }, names, 
 
 const spanOf = (values: readonly number[]) => ({ from: values.at(0) ?? 0, to: values.at(-1) ?? 1 });
 
-function ticksOf({ from, to }: { from: number; to: number }): number[] {
-  return multiples(niceStep((to - from) / TICKS), from, to);
+function ticksOf({ from, to }: { from: number; to: number }, count: number): number[] {
+  return multiples(niceStep((to - from) / count), from, to);
 }

@@ -40,7 +40,7 @@ export function WindowTable({ drawing: { table, tableX }, x, y }: Props) {
                     {margin === null ? null : (
                       <span className="block text-label text-quiet">
                         {margin < 0 ? "−" : ""}
-                        {Math.abs(Math.round(margin * 100))} %
+                        {Math.abs(Math.round(margin * 100))}&nbsp;%
                       </span>
                     )}
                   </td>

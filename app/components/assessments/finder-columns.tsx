@@ -1,10 +1,14 @@
+import type { ReactNode } from "react";
 import { Link } from "react-router";
 import { FindingTag } from "#app/components/drawings/FindingTag.tsx";
 import { noBreak } from "#app/components/drawings/no-break.ts";
 import type { Column } from "#app/components/ui/DataTable.tsx";
+import { tightestWords } from "#app/lib/finder-rows.ts";
+import { triedPath } from "#app/lib/tried-path.ts";
 import type { FinderRow } from "#app/schemas/finder.ts";
 import type { TrialHead } from "#app/schemas/trial.ts";
 import { TryOnCopy } from "./TryOnCopy.tsx";
+import { WorkingLink } from "./WorkingLink.tsx";
 
 /** Thickness in µm as the list shows it. */
 const micrometres = (thickness: number) => String(Number((thickness * 1e6).toPrecision(4)));
@@ -69,11 +73,12 @@ export function finderColumns(head: TrialHead): Column<FinderRow>[] {
 /** How it came out, and for what fits the way to try it. */
 function FinderFinding({ row, head }: { row: FinderRow; head: TrialHead }) {
   const { fits, outcome, tightest, reason, posted, carrier, material, thickness } = row;
-  if (!fits && reason) return <Misfit outcome={outcome} reason={reason} head={head} />;
+  const working = <RowWorking row={row} head={head} />;
+  if (!fits && reason) return <Misfit outcome={outcome} reason={reason} head={head} working={working} />;
   return (
     <div className="tablet:flex tablet:items-center tablet:justify-between tablet:gap-4">
       <FindingTag outcome={outcome} word={outcome === "clear" ? "Fits" : "Fits, with cautions"}>
-        {tightest ? `tightest at ${tightest}` : undefined}
+        {tightest ? `tightest at ${tightestWords(tightest)}` : undefined} {working}
       </FindingTag>
       {posted !== null && head.barred === null ? (
         <TryOnCopy
@@ -86,13 +91,28 @@ function FinderFinding({ row, head }: { row: FinderRow; head: TrialHead }) {
   );
 }
 
+/** To the figures behind a row, before and after; what is planned already has its own in the assessment. */
+function RowWorking({
+  row: { posted, tightest, reason, carrier, material },
+  head,
+}: {
+  row: FinderRow;
+  head: TrialHead;
+}) {
+  const { step, rule } = reason ?? tightest ?? { step: 0, rule: null };
+  const at = rule === null ? null : { step, rule };
+  const path = posted === null ? null : triedPath(head.id, posted, at);
+  return <WorkingLink path={path} of={`${carrier}, ${material}`} />;
+}
+
 interface MisfitProps {
   outcome: FinderRow["outcome"];
   reason: NonNullable<FinderRow["reason"]>;
   head: TrialHead;
+  working: ReactNode;
 }
 
-function Misfit({ outcome, reason: { step, rule, text }, head }: MisfitProps) {
+function Misfit({ outcome, reason: { step, rule, text }, head, working }: MisfitProps) {
   const missed = rule === null && outcome !== "cannot judge";
   return (
     <>
@@ -102,7 +122,9 @@ function Misfit({ outcome, reason: { step, rule, text }, head }: MisfitProps) {
         </Link>
         {rule === null ? "" : `, rule ${rule}`}
       </FindingTag>
-      <span className="mt-0.5 block">{noBreak(text)}</span>
+      <span className="mt-0.5 block">
+        {noBreak(text)} {working}
+      </span>
     </>
   );
 }

@@ -2,7 +2,7 @@ import { useState } from "react";
 import { Form } from "react-router";
 import { FindingTag } from "#app/components/drawings/FindingTag.tsx";
 import { noBreak } from "#app/components/drawings/no-break.ts";
-import { changedSteps, type Answer, type StepChange } from "#app/lib/what-if-answer.ts";
+import type { StepChange, ToldAnswer } from "#app/lib/what-if-answer.ts";
 import { placeOf } from "#app/lib/what-if.ts";
 import { whatIfWords } from "#app/lib/what-if-words.ts";
 import { useWhatIf } from "./use-what-if.ts";
@@ -14,10 +14,7 @@ export default function WhatIfPane({ flowId, mayEdit }: { flowId: string; mayEdi
   // A put-back clears the field that is being typed in too.
   const [round, setRound] = useState(0);
   const { loaded, failed, changes, typed, answer, stale } = whatIf;
-  if (failed)
-    return (
-      <p className="mt-3 font-semibold text-stop">The flow could not be read. Close this part and open it again.</p>
-    );
+  if (failed !== null) return <p className="mt-3 font-semibold text-stop">{failed}</p>;
   if (!loaded) return <p className="mt-3 text-quiet">Reading the flow</p>;
   const { snapshot, present } = loaded;
   if (snapshot.input.steps.length === 0) return <p className="mt-3 text-quiet">The flow has no steps yet.</p>;
@@ -38,7 +35,11 @@ export default function WhatIfPane({ flowId, mayEdit }: { flowId: string; mayEdi
           ))}
         </ul>
       )}
-      <div className="grid border-t border-ink tablet:grid-cols-2" aria-live="polite">
+      <div
+        className="grid border-t border-ink tablet:grid-cols-2"
+        aria-live="polite"
+        aria-busy={changes.length > 0 && stale}
+      >
         <AnswerSide head="As the flow is" answer={present} />
         {answer ? (
           <div className={`border-line max-tablet:border-t tablet:border-l tablet:pl-4 ${stale ? "opacity-60" : ""}`}>
@@ -52,9 +53,7 @@ export default function WhatIfPane({ flowId, mayEdit }: { flowId: string; mayEdi
           </p>
         )}
       </div>
-      {answer?.computed && present.computed && (
-        <ChangedSteps steps={changedSteps(present.assessment, answer.assessment)} />
-      )}
+      {answer?.computed && answer.changed && <ChangedSteps steps={answer.changed} />}
       {changes.length > 0 && (
         <div className="flex flex-wrap gap-2 border-t border-ink pt-3">
           {mayEdit && (
@@ -82,15 +81,13 @@ export default function WhatIfPane({ flowId, mayEdit }: { flowId: string; mayEdi
   );
 }
 
-function AnswerSide({ head, answer }: { head: string; answer: Answer }) {
+function AnswerSide({ head, answer }: { head: string; answer: ToldAnswer }) {
   return (
     <section className="py-3 tablet:pr-4">
       <h3 className="text-label text-quiet">{head}</h3>
       {answer.computed ? (
         <>
-          <FindingTag outcome={answer.assessment.verdict.outcome}>
-            {answer.assessment.verdict.step !== null && `first at step ${answer.assessment.verdict.step}`}
-          </FindingTag>
+          <FindingTag outcome={answer.outcome}>{answer.step !== null && `first at step ${answer.step}`}</FindingTag>
           {answer.sentences.map((sentence) => (
             <p key={sentence} className="mt-1 text-lead">
               {noBreak(sentence)}

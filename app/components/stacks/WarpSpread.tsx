@@ -1,7 +1,8 @@
-import { useId, useState, useSyncExternalStore, type KeyboardEvent } from "react";
+import { useId, useState, type KeyboardEvent } from "react";
 import { noBreak } from "#app/components/drawings/no-break.ts";
+import { RunProgress } from "#app/components/ui/RunProgress.tsx";
 import { TextField } from "#app/components/ui/TextField.tsx";
-import { formatNumber } from "#app/engine/units/format-number.ts";
+import { useInBrowser } from "#app/components/ui/use-in-browser.ts";
 import { readQuantity } from "#app/lib/read-quantity.ts";
 import { stackOf } from "#app/lib/stack-of-request.ts";
 import { spreadSentences, type Estimated } from "#app/lib/stack-words.ts";
@@ -10,21 +11,12 @@ import { useWarpSampling } from "./use-warp-sampling.ts";
 
 const FIRST_LIMIT = "400 µm";
 
-const never = () => () => undefined;
-/** Whether scripts run: the worker needs them, and what cannot work is not shown. */
-const useScripts = () =>
-  useSyncExternalStore(
-    never,
-    () => true,
-    () => false,
-  );
-
 /** How many wafers with this stack would exceed a warp, by drawing wafers within the tolerances given. */
 export function WarpSpread({ estimated: { request, answer } }: { estimated: Estimated }) {
-  const scripts = useScripts();
+  const scripts = useInBrowser();
   const id = useId();
   const [typed, setTyped] = useState(FIRST_LIMIT);
-  const { state, start, stop } = useWarpSampling();
+  const { state, key: asked, start, stop } = useWarpSampling();
   if (!scripts) return null;
   const limit = readQuantity(typed, RULES.warpLimit);
   const key = JSON.stringify([request, typed]);
@@ -69,18 +61,17 @@ export function WarpSpread({ estimated: { request, answer } }: { estimated: Esti
               </button>
             )}
             {state.kind === "running" && (
-              <p className="mt-6 flex items-center gap-2 text-quiet">
-                <progress className="w-32" value={state.done} max={state.of} aria-label="Wafers drawn" />
-                {formatNumber(state.done, { decimals: 0 })} of {formatNumber(state.of, { decimals: 0 })}
-              </p>
+              <div className="mt-6">
+                <RunProgress done={state.done} of={state.of} label="Wafers drawn" />
+              </div>
             )}
           </div>
           <div aria-live="polite">
             {state.kind === "failed" && <p className="mt-1 text-stop">{state.why}</p>}
             {state.kind === "done" && (
-              <p className={`mt-1 ${state.key === key ? "" : "text-quiet"}`}>
-                {state.key !== key && "Of the stack before the last change: "}
-                {spreadSentences(state.spread).map((sentence) => (
+              <p className={`mt-1 ${asked === key ? "" : "text-quiet"}`}>
+                {asked !== key && "Of the stack before the last change: "}
+                {spreadSentences(state.found).map((sentence) => (
                   <span key={sentence} className="block">
                     {noBreak(sentence)}
                   </span>

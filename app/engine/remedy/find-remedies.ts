@@ -46,9 +46,11 @@ export interface RemedyAnswer extends Place {
   tried: number;
 }
 
+/** How far a search is: findings looked into, and what was found for them; the list grows while the search runs. */
 export interface RemedyProgress {
   done: number;
   of: number;
+  answers: readonly RemedyAnswer[];
 }
 
 /** How many changes are named for one finding. */
@@ -61,7 +63,8 @@ const ABOUT_DATA = [13, 15];
 
 /**
  * For every rule at every step that is not clear, the smallest change of one quantity that clears it, tried on the full model with all
- * rules. Yields after every candidate, so that it can be left or others can have their turn; deterministic, nominal values.
+ * rules, worst finding first. Yields after every candidate, so that it can be left with what it has found or others can have their
+ * turn; deterministic, nominal values.
  * @throws EngineInputError when the flow itself cannot be walked
  */
 export function* findRemedies(
@@ -76,7 +79,7 @@ export function* findRemedies(
   const groups = notClear(findings);
   const answers: RemedyAnswer[] = [];
   for (const [index, group] of groups.entries()) {
-    const progress = { done: index, of: groups.length };
+    const progress = { done: index, of: groups.length, answers };
     yield progress;
     answers.push(yield* answerFor(trials, group, progress));
   }

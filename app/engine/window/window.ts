@@ -35,7 +35,12 @@ export interface ProcessWindow {
 }
 
 export interface WindowProgress {
-  walks: number;
+  /** places walked */
+  done: number;
+  /** places known to need a walk: more when the verdict turns between those looked at so far */
+  of: number;
+  /** the window as far as it is known; null before the first look is complete */
+  soFar(): ProcessWindow | null;
 }
 
 /** Spacing of the first look, in cells. */
@@ -45,7 +50,7 @@ const COARSE = 4;
  * Verdict and margin over two inputs. Looked at in every fourth place first; only where the corners of a block disagree, or their
  * margins change sign, is it looked at closer, so that a window of 41 by 41 costs a few hundred walks. Within a block whose
  * corners agree the outcome is theirs and the margin is interpolated: an island smaller than a block is missed. Yields after
- * every walk. Nominal values.
+ * every walk, so that it can be left with the window as far as it is known. Nominal values.
  * @param cells number of cells along each side, a multiple of 4, from 4 to 80; default 40
  * @param step number of the only step that is judged; null for all of them
  * @throws EngineInputError when a range is empty or the cells are no such number
@@ -66,11 +71,10 @@ export function* processWindow(
   const side = cells + 1;
   const points: (WindowPoint | undefined)[] = new Array<WindowPoint | undefined>(side * side);
   let walks = 0;
-  const look = (column: number, row: number): boolean => {
-    const at = row * side + column;
-    if (points[at]) return false;
-    const [valueX, valueY] = [x[column], y[row]];
-    if (valueX === undefined || valueY === undefined) return false;
+  let lookedOver = false;
+  const look = (at: number) => {
+    const [valueX, valueY] = [x[at % side], y[Math.floor(at / side)]];
+    if (valueX === undefined || valueY === undefined) return;
     walks += 1;
     const changes = [axes.x.change(valueX), axes.y.change(valueY)];
     points[at] = pointOf(() => {
@@ -78,24 +82,20 @@ export function* processWindow(
       const findings = judged(walkVariant(base, variant, limits), limits);
       return step === null ? findings : findings.filter((finding) => finding.step === step);
     });
-    return true;
   };
-  for (let row = 0; row < side; row += COARSE)
-    for (let column = 0; column < side; column += COARSE) if (look(column, row)) yield { walks };
-  // Blocks are halved while their corners disagree.
-  for (let size = COARSE; size > 1; size /= 2)
-    for (let row = 0; row + size < side; row += size)
-      for (let column = 0; column + size < side; column += size) {
-        const corners = cornersOf(points, side, { column, row, size });
-        // A corner that was not looked at lies in a larger block that agrees.
-        if (corners.includes(undefined) || agree(corners)) continue;
-        const half = size / 2;
-        for (const down of [0, half, size])
-          for (const along of [0, half, size]) if (look(column + along, row + down)) yield { walks };
-      }
-  for (let size = COARSE; size > 1; size /= 2) fill(points, side, size);
-  const whole = points.map((point) => point ?? { outcome: "cannot judge" as const, margin: null, first: null });
-  return { x, y, points: whole, walks };
+  const known = (): ProcessWindow => ({ x, y, points: filled(points, side), walks });
+  const soFar = () => (lookedOver ? known() : null);
+  // Every fourth place, then those about blocks whose corners disagree, which are halved until they are cells.
+  for (let size = COARSE; size >= 1; size /= 2) {
+    const places = size === COARSE ? everyPlace(side, size) : turningPlaces(points, side, size);
+    const of = walks + places.length;
+    for (const at of places) {
+      look(at);
+      yield { done: walks, of, soFar };
+    }
+    lookedOver = true;
+  }
+  return known();
 }
 
 const NOTHING = { carriers: [], materials: [], tools: [] };
@@ -143,6 +143,37 @@ function agree(corners: (WindowPoint | undefined)[]): boolean {
         Math.sign(corner.margin ?? 0) === Math.sign(first.margin ?? 0),
     )
   );
+}
+
+/** Places of a grid, by their index, at a spacing in both directions. */
+function everyPlace(side: number, size: number): number[] {
+  const along = Array.from({ length: Math.ceil(side / size) }, (_, index) => index * size);
+  return along.flatMap((row) => along.map((column) => row * side + column));
+}
+
+/** Places at a spacing, not looked at yet, in and about the blocks of twice that whose corners disagree. */
+function turningPlaces(points: Points, side: number, size: number): number[] {
+  const places = new Set<number>();
+  const block = 2 * size;
+  for (let row = 0; row + block < side; row += block)
+    for (let column = 0; column + block < side; column += block) {
+      const corners = cornersOf(points, side, { column, row, size: block });
+      // A corner that was not looked at lies in a larger block that agrees.
+      if (corners.includes(undefined) || agree(corners)) continue;
+      for (const down of [0, size, block])
+        for (const along of [0, size, block]) {
+          const at = (row + down) * side + column + along;
+          if (!points[at]) places.add(at);
+        }
+    }
+  return [...places];
+}
+
+/** All places of a grid: those that were not looked at lie among ones that agree, or between those known so far. */
+function filled(points: Points, side: number): WindowPoint[] {
+  const copy = points.slice();
+  for (let size = COARSE; size > 1; size /= 2) fill(copy, side, size);
+  return copy.map((point) => point ?? { outcome: "cannot judge", margin: null, first: null });
 }
 
 /** Fills the middle places of blocks that were not looked at closer, from the two or four places about them. */

@@ -2,8 +2,9 @@ import type { Catalogue } from "#app/engine/trial/catalogue.ts";
 import { revisionLetters } from "#app/lib/assessment-revision.ts";
 import { mayInProgram } from "#app/policies/permissions.ts";
 import type { AssessmentInput } from "#app/schemas/assessment-changes.ts";
-import type { TrialHead } from "#app/schemas/trial.ts";
+import type { TrialHead, TrialQuestion } from "#app/schemas/trial.ts";
 import { inScope, type ActorScope } from "#app/server/scope.server.ts";
+import { requireInProgram } from "../permission.server.ts";
 import { findAssessment } from "./assessments.server.ts";
 import { readCatalogue } from "./catalogue.server.ts";
 import { isOutOfDate } from "./out-of-date.server.ts";
@@ -13,6 +14,7 @@ import { presentFlow } from "./present-inputs.server.ts";
 export interface TrialGround extends TrialHead {
   input: AssessmentInput;
   catalogue: Catalogue;
+  programId: string;
 }
 
 /** What trials of an assessment begin from; refused to whom its program is a wall. */
@@ -32,9 +34,34 @@ export async function trialGround(scope: ActorScope, assessmentId: string | unde
       input: input.$,
       catalogue: await readCatalogue(em),
       barred: may ? (old ? "out of date" : null) : "role",
+      mayAssess: mayInProgram(scope.actor, "run assessments", program.id),
+      programId: program.id,
     };
   });
 }
 
 /** The part of it that a page shows. */
-export const trialHead = ({ id, revision, flow, barred }: TrialGround): TrialHead => ({ id, revision, flow, barred });
+export const trialHead = ({ id, revision, flow, barred, mayAssess }: TrialGround): TrialHead => ({
+  id,
+  revision,
+  flow,
+  barred,
+  mayAssess,
+});
+
+/** What trials ask of the engine. */
+export const trialQuestion = ({ input: { flow, limits }, catalogue }: TrialGround): TrialQuestion => ({
+  flow,
+  limits,
+  catalogue,
+});
+
+/**
+ * The ground of trials for the engine in the browser of somebody who may assess the flow, who is given the same for a what-if; refused
+ * to everybody else.
+ */
+export async function sentGround(scope: ActorScope, assessmentId: string | undefined): Promise<TrialGround> {
+  const ground = await trialGround(scope, assessmentId);
+  requireInProgram(scope, "run assessments", ground.programId, "assessment");
+  return ground;
+}

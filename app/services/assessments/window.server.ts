@@ -1,53 +1,55 @@
 import { EngineInputError } from "#app/engine/errors.ts";
-import type { FlowInput } from "#app/engine/flow/model.ts";
-import type { SiteLimits } from "#app/engine/rules/limits.ts";
-import { processWindow } from "#app/engine/window/window.ts";
 import { readQuantity } from "#app/lib/read-quantity.ts";
-import { windowDrawing } from "#app/lib/window-drawing.ts";
 import { choiceText, usualRange, windowChoices, windowInput, type WindowChoice } from "#app/lib/window-inputs.ts";
-import type { AskedAxis, WindowDrawing, WindowPageData } from "#app/schemas/process-window.ts";
+import { windowRun } from "#app/lib/window-run.ts";
+import { refusalWords } from "#app/lib/worker-run.ts";
+import type { AskedAxis, SentWindow, WindowPageData } from "#app/schemas/process-window.ts";
 import type { ActorScope } from "#app/server/scope.server.ts";
 import { inTurns } from "./in-turns.server.ts";
-import { trialGround, trialHead } from "./trial-ground.server.ts";
+import { sentGround, trialGround, trialHead, type TrialGround } from "./trial-ground.server.ts";
 
-/**
- * The verdict of an assessment's flow over two of its inputs, as the address asks. Nothing is drawn until two inputs are chosen;
- * a range left blank is the usual one about what is planned. `step` judges one step alone: elsewhere something else may bar the flow.
- */
+/** The verdict of an assessment's flow over two of its inputs, as the address asks. */
 export async function windowOf(
   scope: ActorScope,
   assessmentId: string | undefined,
   search: URLSearchParams,
 ): Promise<WindowPageData> {
-  const ground = await trialGround(scope, assessmentId);
+  const { page, question } = readWindow(await trialGround(scope, assessmentId), search);
+  if (!question) return page;
+  try {
+    return { ...page, drawing: await inTurns(windowRun(question)) };
+  } catch (error) {
+    if (error instanceof EngineInputError) return { ...page, fault: refusalWords(error) };
+    throw error;
+  }
+}
+
+/** The same as it is asked, for the engine in the browser of somebody who may have the inputs. */
+export async function windowAsked(
+  scope: ActorScope,
+  assessmentId: string | undefined,
+  search: URLSearchParams,
+): Promise<SentWindow> {
+  return readWindow(await sentGround(scope, assessmentId), search);
+}
+
+/**
+ * What an address asks of a window. Nothing is drawn until two inputs are chosen; a range left blank is the usual one about what is
+ * planned. `step` judges one step alone: elsewhere something else may bar the flow.
+ */
+function readWindow(ground: TrialGround, search: URLSearchParams): SentWindow {
   const { flow, limits } = ground.input;
   const choices = windowChoices(flow);
   const [x, y] = [readAxis(search, "x", choices), readAxis(search, "y", choices)];
   const steps = flow.steps.map(({ title }, index) => ({ number: index + 1, title }));
   const step = steps.find(({ number }) => String(number) === search.get("step"))?.number ?? null;
-  const page = { head: trialHead(ground), inputs: choices.map(windowInput), steps, step, x: x.asked, y: y.asked };
-  if (!x.choice || !y.choice) return { ...page, fault: null, drawing: null };
-  if (x.choice === y.choice) return { ...page, fault: "Choose two different inputs.", drawing: null };
-  if (!x.range || !y.range) return { ...page, fault: null, drawing: null };
-  const axes = { x: { ...x.choice, ...x.range }, y: { ...y.choice, ...y.range } };
-  const drawing = await drawn(flow, limits, axes, step);
-  return typeof drawing === "string" ? { ...page, fault: drawing, drawing: null } : { ...page, fault: null, drawing };
-}
-
-type Axis = WindowChoice & { from: number; to: number };
-
-async function drawn(
-  flow: FlowInput,
-  limits: SiteLimits,
-  axes: { x: Axis; y: Axis },
-  step: number | null,
-): Promise<WindowDrawing | string> {
-  try {
-    return windowDrawing(await inTurns(processWindow(flow, limits, axes, { step })), axes);
-  } catch (error) {
-    if (error instanceof EngineInputError) return `This cannot be computed: ${error.reason}.`;
-    throw error;
-  }
+  const asked = { head: trialHead(ground), inputs: choices.map(windowInput), steps, step, x: x.asked, y: y.asked };
+  const page = { ...asked, fault: null, drawing: null };
+  if (!x.choice || !y.choice) return { page, question: null };
+  if (x.choice === y.choice) return { page: { ...page, fault: "Choose two different inputs." }, question: null };
+  if (!x.range || !y.range) return { page, question: null };
+  const sides = { x: { input: x.choice.key, ...x.range }, y: { input: y.choice.key, ...y.range } };
+  return { page, question: { flow, limits, ...sides, step } };
 }
 
 function readAxis(search: URLSearchParams, name: "x" | "y", choices: readonly WindowChoice[]) {

@@ -66,9 +66,28 @@ describe("process window of Petrel, plated copper against silicon", () => {
     expect(at(column, row)?.outcome).toBe(assessFlow(changed, limits).verdict.outcome);
   });
 
+  it("tells how far it is, and once it has looked everywhere what is known so far", () => {
+    const search = processWindow(flow, limits, axes, { cells: 16 });
+    let [done, partial] = [0, 0];
+    for (;;) {
+      const next = search.next();
+      if (next.done) break;
+      expect(next.value.done).toBe((done += 1));
+      expect(next.value.of).toBeGreaterThanOrEqual(done);
+      const soFar = next.value.soFar();
+      expect(soFar === null).toBe(done <= 25);
+      if (!soFar) continue;
+      partial += 1;
+      expect(soFar.points).toHaveLength(17 * 17);
+      expect(soFar.walks).toBe(done);
+    }
+    expect(done).toBe(found.walks);
+    expect(partial).toBe(found.walks - 25);
+  });
+
   it("can be left between two walks", () => {
     const search = processWindow(flow, limits, axes, { cells: 8 });
-    expect(search.next().value).toEqual({ walks: 1 });
+    expect(search.next().value).toMatchObject({ done: 1, of: 9 });
     expect(search.return({ x: [], y: [], points: [], walks: 0 }).done).toBe(true);
   });
 

@@ -1,10 +1,11 @@
 import { redirect } from "react-router";
-import { RemediesPage } from "#app/components/assessments/RemediesPage.tsx";
-import { remediesView } from "#app/lib/remedies-view.ts";
+import { RemediesPage, type RemediesPageData } from "#app/components/assessments/RemediesPage.tsx";
+import { byServer, readSent } from "#app/lib/read-sent.ts";
+import type { SentTrial } from "#app/schemas/trial.ts";
 import { scopeOf } from "#app/server/contexts.server.ts";
 import { postedForm } from "#app/server/form.server.ts";
 import { remediesOf } from "#app/services/assessments/remedies.server.ts";
-import { trialGround, trialHead } from "#app/services/assessments/trial-ground.server.ts";
+import { trialGround, trialHead, trialQuestion } from "#app/services/assessments/trial-ground.server.ts";
 import { tryOnCopy } from "#app/services/assessments/try-on-copy.server.ts";
 import type { Route } from "./+types/remedies";
 
@@ -12,13 +13,19 @@ export const meta: Route.MetaFunction = ({ loaderData }) => [
   { title: `What clears it${loaderData ? `, ${loaderData.head.flow.name}` : ""} · Planeward` },
 ];
 
-export async function loader({ context, params }: Route.LoaderArgs) {
+export async function loader({ context, params }: Route.LoaderArgs): Promise<RemediesPageData> {
   const ground = await trialGround(scopeOf(context), params.assessmentId);
-  const answers = await remediesOf(ground);
-  return {
-    head: trialHead(ground),
-    view: answers && remediesView(answers, { flow: ground.input.flow, catalogue: ground.catalogue }),
-  };
+  return { head: trialHead(ground), view: await remediesOf(trialQuestion(ground)) };
+}
+
+/** Within the application the browser looks for changes itself, unless the address has the server do it. */
+export async function clientLoader({
+  params,
+  request,
+  serverLoader,
+}: Route.ClientLoaderArgs): Promise<RemediesPageData> {
+  if (byServer(new URL(request.url))) return serverLoader();
+  return readSent<SentTrial>(`/assessments/${params.assessmentId}/trial`).catch(() => serverLoader());
 }
 
 /** Trying a change on a copy: from here, from the assessment and from the finder. */
