@@ -1,6 +1,6 @@
 import { EngineInputError } from "#app/engine/errors.ts";
 import { answerSentences } from "#app/engine/flow/answer.ts";
-import { assessFlow, type AssessedStep, type FlowAssessment } from "#app/engine/flow/assess.ts";
+import { judgeFlow, type AssessedStep, type FlowAssessment } from "#app/engine/flow/judge.ts";
 import type { FlowInput } from "#app/engine/flow/model.ts";
 import type { SiteLimits } from "#app/engine/rules/limits.ts";
 import { formatQuantity } from "#app/engine/units/format.ts";
@@ -10,10 +10,10 @@ import type { Outcome } from "#app/engine/vocabulary.ts";
 export type Answer =
   { computed: true; assessment: FlowAssessment; sentences: string[] } | { computed: false; reason: string };
 
-/** Assesses a flow as the server would, with the same code. */
+/** Assesses a flow as the server would, with the same code; the derivations, which nothing here shows, are left out. */
 export function answerOf(input: FlowInput, limits: SiteLimits): Answer {
   try {
-    const assessment = assessFlow(input, limits);
+    const assessment = judgeFlow(input, limits);
     return { computed: true, assessment, sentences: answerSentences(input, assessment) };
   } catch (error) {
     if (!(error instanceof EngineInputError)) throw error;

@@ -7,8 +7,10 @@ const root = fileURLToPath(new URL("../../../", import.meta.url));
 /** What a page needs to compute while somebody types, by module of the engine. */
 const LIVE = {
   "stack/estimate-stack.ts": ["estimateStack"],
-  "stack/thickness-sweep.ts": ["thicknessSweep"],
-  "flow/assess.ts": ["assessFlow"],
+  "stack/stack-support.ts": ["stackSupport"],
+  "stack/thickness-sweep.ts": ["curlingThickness", "thicknessSweep"],
+  "stack/warp-uncertainty.ts": ["warpUncertainty"],
+  "flow/judge.ts": ["judgeFlow"],
   "rules/limits.ts": ["defaultLimits", "LIMIT_DEFINITIONS"],
   "units/parse-quantity.ts": ["parseQuantity"],
   "units/format.ts": ["formatQuantity", "formatWithUncertainty"],

@@ -1,4 +1,4 @@
-import type { AssessedStep, FlowAssessment } from "./assess.ts";
+import type { AssessedStep, FlowAssessment } from "./judge.ts";
 import type { FlowInput } from "./model.ts";
 import { inSentence } from "../in-sentence.ts";
 import { supportRank, type SupportClass } from "../vocabulary.ts";

@@ -2,6 +2,7 @@ import type { FlowInput } from "../flow/model.ts";
 import type { StepState } from "../flow/walk.ts";
 import type { Outcome, SourceKind } from "../vocabulary.ts";
 import type { UnitSymbol, Working } from "../working.ts";
+import type { FindingWorkings } from "./finding-workings.ts";
 import type { LimitKey, SiteLimits } from "./limits.ts";
 
 /** A number in a finding, in SI, with its working when there is one. */
@@ -50,8 +51,8 @@ export interface RuleContext {
   limits: SiteLimits;
   steps: StepState[];
   uncertainty: StepUncertainty[];
-  /** false leaves out the workings of shapes, which cost as much as the shapes: for trials that nobody looks at; default true */
-  workings?: boolean;
+  /** derivations of the figures; null leaves them out, which saves as much as the shapes cost */
+  workings: FindingWorkings | null;
 }
 
 /** A handling rule. `judge` looks at one step and returns what it finds, nothing when the rule has no say there. */

@@ -1,4 +1,4 @@
-import type { FlowAssessment } from "../flow/assess.ts";
+import type { FlowAssessment } from "../flow/judge.ts";
 import { failureProbability, type WeibullStrength } from "../strength/weibull.ts";
 
 export interface RankedStep {

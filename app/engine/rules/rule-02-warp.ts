@@ -10,7 +10,6 @@ import { againstUpperLimit, exceeds } from "./against-limit.ts";
 import type { Finding, Rule, RuleContext } from "./finding.ts";
 import { shapeIsKnown } from "./shape-known.ts";
 import { shareBeyond, sharedBy } from "./share-beyond.ts";
-import { shapeWorking } from "./warp-working.ts";
 
 const TITLE = "Warp on the tool";
 
@@ -75,7 +74,7 @@ function judge(context: RuleContext, state: StepState): Finding[] {
   return judged.slice(0, 1).map(({ shape, figures: [warp, ...figures], ...finding }) => ({
     ...finding,
     // A working costs as much as the shape itself, so only the finding that stays gets one.
-    figures: warp ? [{ ...warp, working: shapeWorking(context, shape) }, ...figures] : [],
+    figures: warp ? [{ ...warp, working: context.workings?.warp(shape) ?? null }, ...figures] : [],
   }));
 }
 

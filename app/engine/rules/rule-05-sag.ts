@@ -1,7 +1,6 @@
 import { gravitySag, type GravitySagInput } from "../gravity/gravity-sag.ts";
 import { siliconSagConstants } from "../gravity/silicon-sag-constants.ts";
 import type { Support } from "../gravity/support.ts";
-import { gravitySagWorking } from "../gravity/working.ts";
 import type { Clamping } from "../flow/handling-inputs.ts";
 import type { LyingShape } from "../flow/shape.ts";
 import type { WaferState } from "../flow/state.ts";
@@ -100,7 +99,12 @@ function sagging(context: RuleContext, state: StepState, shape: LyingShape): Fin
           ? "Use every second slot, or a box with more clearance."
           : "Plan tape, ring or carrier here, or use every second slot.",
         figures: [
-          { label: "Sag by small deflections", value: most, unit: "m", working: gravitySagWorking(plate) },
+          {
+            label: "Sag by small deflections",
+            value: most,
+            unit: "m",
+            working: context.workings?.sag(plate) ?? null,
+          },
           { label: "Warp", value: shape.warp, unit: "m" },
           { label: "Sag plus warp", value: most + shape.warp, unit: "m" },
         ],

@@ -7,7 +7,6 @@ import type { Finding, Rule, RuleContext } from "./finding.ts";
 import { findingsOf, siteLimit, statedLimit, temperatureFigure } from "./make-finding.ts";
 import { releasePath } from "./release-path.ts";
 import { thinnest } from "./rule-01-thickness.ts";
-import { shapeWorking } from "./warp-working.ts";
 import { celsius, micrometres, millimetres, wholeMicrometres } from "./words.ts";
 
 const TITLE = "Carrier";
@@ -15,13 +14,13 @@ const make = findingsOf(7, TITLE);
 
 /** The pair as it comes out of the bond against the bonder: a match is judged by this bow, never by expansions alone. */
 function pairBow(context: RuleContext, state: StepState, shape: LyingShape, { carrier }: BondState): Finding[] {
-  const { limits } = context;
+  const { limits, workings } = context;
   const tool = state.step.equipment;
   const up = edgesUp(shape, state.after.faceUp);
   const direction = up ? "edges up" : "edges down";
   const limit = up ? tool?.warpLimitEdgesUp : tool?.warpLimitEdgesDown;
   const figures: Finding["figures"] = [
-    { label: "Warp of the pair", value: shape.warp, unit: "m", working: shapeWorking(context, shape) },
+    { label: "Warp of the pair", value: shape.warp, unit: "m", working: workings?.warp(shape) ?? null },
     { label: "Bow, device side up", value: standardBow(shape.sagitta), unit: "m" },
   ];
   const how = exceeds(shape.warp, limits.flatWithin.value) ? direction : "flat,";

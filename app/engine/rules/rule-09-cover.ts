@@ -3,7 +3,6 @@ import type { BondState } from "../flow/bond.ts";
 import type { StepState } from "../flow/walk.ts";
 import { bumpCover } from "../thickness-budget/bump-cover.ts";
 import { thicknessBudget, type ThicknessContribution } from "../thickness-budget/thickness-budget.ts";
-import { bumpCoverWorking, thicknessBudgetWorking } from "../thickness-budget/working.ts";
 import { outcomeRank, type Outcome } from "../vocabulary.ts";
 import { againstLowerLimit, againstUpperLimit, exceeds } from "./against-limit.ts";
 import type { Finding, FindingLimit, Rule, RuleContext } from "./finding.ts";
@@ -37,13 +36,14 @@ function unknownHeight(state: StepState): Finding {
 }
 
 /** A bond covers the face that it is on, a grinding tape the device side. */
-function covering({ steps, limits }: RuleContext, state: StepState): Finding[] {
+function covering(context: RuleContext, state: StepState): Finding[] {
+  const { steps } = context;
   const { step, before } = state;
   const feature = tallest(state);
   if (step.kind === "bond" && step.bond && (step.bond.face ?? "front") === "front" && !before.bond) {
     if (feature)
       return [
-        against(state, limits, { ...feature, cover: step.bond.thickness.value, coverName: step.bond.material.name }),
+        against(context, state, { ...feature, cover: step.bond.thickness.value, coverName: step.bond.material.name }),
       ];
     return hasBumps(steps, state) ? [unknownHeight(state)] : [];
   }
@@ -71,13 +71,13 @@ function covering({ steps, limits }: RuleContext, state: StepState): Finding[] {
         },
       ),
     ];
-  return [against(state, limits, { ...feature, cover: depth.value, coverName: "the embedding layer" })];
+  return [against(context, state, { ...feature, cover: depth.value, coverName: "the embedding layer" })];
 }
 
 /** Over the share is a caution while enough is left over the bumps; too little left fails. Tallest: height plus tolerance. */
 function against(
+  { limits, workings }: RuleContext,
   state: StepState,
-  limits: RuleContext["limits"],
   { feature, featureName, cover, coverName }: Cover,
 ): Finding {
   const height = feature.value + (feature.tolerance ?? 0);
@@ -95,7 +95,12 @@ function against(
     {
       remedy: `Cover them thicker, at least ${micrometres(Math.max(height / limits.coverShare.value, height + coverLeftClear.value))}, or make them lower.`,
       figures: [
-        { label: "Share of the cover that they take", value: ratio, unit: "1", working: bumpCoverWorking(input) },
+        {
+          label: "Share of the cover that they take",
+          value: ratio,
+          unit: "1",
+          working: workings?.bumpCover(input) ?? null,
+        },
         { label: "Left over them", value: left, unit: "m" },
       ],
       limit: siteLimit(limits, outcomeRank(byLeft) > outcomeRank(byShare) ? "coverLeft" : "coverShare"),
@@ -146,7 +151,7 @@ function budget(context: RuleContext, state: StepState): Finding[] {
   const missing = parts.filter(({ variation }) => variation === null).map(({ name }) => name);
   // On tape nobody asks for it unless the tape's own variation is known.
   if (!bond && missing.length > 0) return [];
-  return [known.length === 0 ? unknownVariation(state, missing) : inBudget(state, known, missing)];
+  return [known.length === 0 ? unknownVariation(state, missing) : inBudget(context, state, known, missing)];
 }
 
 function unknownVariation(state: StepState, missing: string[]): Finding {
@@ -155,7 +160,12 @@ function unknownVariation(state: StepState, missing: string[]): Finding {
   });
 }
 
-function inBudget(state: StepState, contributions: ThicknessContribution[], missing: string[]): Finding {
+function inBudget(
+  { workings }: RuleContext,
+  state: StepState,
+  contributions: ThicknessContribution[],
+  missing: string[],
+): Finding {
   const protrusion = state.step.viaProtrusion ?? null;
   const input = {
     contributions,
@@ -177,13 +187,13 @@ function inBudget(state: StepState, contributions: ThicknessContribution[], miss
       label: "Thickness variation, linear",
       value: linear,
       unit: "m",
-      working: thicknessBudgetWorking(input, "linear"),
+      working: workings?.thicknessBudget(input, "linear") ?? null,
     },
     {
       label: "Thickness variation, root-sum-square",
       value: rootSumSquare,
       unit: "m",
-      working: thicknessBudgetWorking(input, "root sum square"),
+      working: workings?.thicknessBudget(input, "root sum square") ?? null,
     },
   ];
   const both = `${sum} = ${micrometres(linear)} linear, ${micrometres(rootSumSquare)} root-sum-square`;

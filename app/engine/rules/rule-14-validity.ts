@@ -2,7 +2,6 @@ import { glassTransition } from "../flow/bond.ts";
 import type { StepState } from "../flow/walk.ts";
 import { siliconBiaxialModulus } from "../silicon/biaxial-modulus.ts";
 import { stoneyCurvature } from "../stoney/stoney.ts";
-import { stoneyCurvatureWorking } from "../stoney/working.ts";
 import { reaches } from "./against-limit.ts";
 import type { Finding, Rule, RuleContext } from "./finding.ts";
 import { findingsOf, siteLimit } from "./make-finding.ts";
@@ -16,7 +15,7 @@ const make = findingsOf(14, TITLE);
 const THIN = 1e-6;
 
 /** How far the thin-film formula is off the laminate; said where it matters, because the laminate is what is used. */
-function thinFilm({ flow, limits }: RuleContext, state: StepState): Finding[] {
+function thinFilm({ flow, limits, workings }: RuleContext, state: StepState): Finding[] {
   const { atRoom, after, step, filmForce } = state;
   // The shape that a wafer came in with is no film's, so the film forces alone do not make the bow.
   if (!atRoom || after.bond || after.incoming || step.adds.length === 0 || atRoom.warp <= limits.flatWithin.value)
@@ -42,7 +41,7 @@ function thinFilm({ flow, limits }: RuleContext, state: StepState): Finding[] {
             label: "Curvature by the thin-film formula",
             value: thin,
             unit: "1/m",
-            working: stoneyCurvatureWorking(input),
+            working: workings?.stoneyCurvature(input) ?? null,
           },
         ],
         limit: siteLimit(limits, "stoneyWithin"),
