@@ -91,6 +91,7 @@ export { answerSentences, supportSpans } from "./flow/answer.ts";
 // Handling rules
 export type { Figure, Finding, FindingLimit, Rule, RuleContext } from "./rules/finding.ts";
 export { defaultLimits, LIMIT_DEFINITIONS, type LimitKey, type SiteLimits } from "./rules/limits.ts";
+export { DESCRIBED_RULES } from "./rules/described-rules.ts";
 export { RULES } from "./rules/rules.ts";
 
 // Directional stack and patterned films

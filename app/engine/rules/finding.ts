@@ -59,8 +59,11 @@ export interface RuleContext {
 export interface Rule {
   number: number;
   title: string;
-  /** what it asks, for the method page */
+  judge(context: RuleContext, state: StepState): Finding[];
+}
+
+/** What a rule asks in words, and the limits that it reads, for the method page. */
+export interface RuleAbout {
   asks: string;
   limits: LimitKey[];
-  judge(context: RuleContext, state: StepState): Finding[];
 }

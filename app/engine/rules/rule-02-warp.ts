@@ -7,7 +7,7 @@ import { inSentence } from "../in-sentence.ts";
 import type { FaceUp, Outcome } from "../vocabulary.ts";
 import { outcomeRank } from "../vocabulary.ts";
 import { againstUpperLimit, exceeds } from "./against-limit.ts";
-import type { Finding, Rule, RuleContext } from "./finding.ts";
+import type { Finding, Rule, RuleAbout, RuleContext } from "./finding.ts";
 import { shapeIsKnown } from "./shape-known.ts";
 import { shareBeyond, sharedBy } from "./share-beyond.ts";
 
@@ -155,7 +155,10 @@ const capital = (text: string) => text.charAt(0).toUpperCase() + text.slice(1);
 export const warpRule: Rule = {
   number: 2,
   title: TITLE,
+  judge,
+};
+
+export const aboutWarp: RuleAbout = {
   asks: "Does the wafer or pair lie flat enough for the tool, as it is loaded, as it leaves, and at peak where the tool leaves it free, against the tool's limit for edges up and for edges down?",
   limits: ["warpMargin", "flatWithin"],
-  judge,
 };

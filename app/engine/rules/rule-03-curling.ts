@@ -1,7 +1,7 @@
 import type { LyingShape } from "../flow/shape.ts";
 import type { StepState } from "../flow/walk.ts";
 import { againstUpperLimit, exceeds } from "./against-limit.ts";
-import type { Figure, Finding, Rule, RuleContext } from "./finding.ts";
+import type { Figure, Finding, Rule, RuleAbout, RuleContext } from "./finding.ts";
 import { findingsOf } from "./make-finding.ts";
 import { shapeIsKnown } from "./shape-known.ts";
 import { height } from "./words.ts";
@@ -84,7 +84,10 @@ function judge({ limits, workings }: RuleContext, state: StepState): Finding[] {
 export const curlingRule: Rule = {
   number: 3,
   title: TITLE,
+  judge,
+};
+
+export const aboutCurling: RuleAbout = {
   asks: "Where the wafer or pair is free: does it stay clear of the load at which it rolls up about one axis? A held wafer is not judged; what it would do if released is said.",
   limits: ["curlMargin"],
-  judge,
 };

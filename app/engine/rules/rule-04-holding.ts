@@ -6,7 +6,7 @@ import type { StepState } from "../flow/walk.ts";
 import { siliconBiaxialModulus } from "../silicon/biaxial-modulus.ts";
 import { bendingStress } from "../strength/bending.ts";
 import { againstUpperLimit } from "./against-limit.ts";
-import type { Figure, Finding, FindingLimit, Rule, RuleContext } from "./finding.ts";
+import type { Figure, Finding, FindingLimit, Rule, RuleAbout, RuleContext } from "./finding.ts";
 import type { LimitKey, SiteLimits } from "./limits.ts";
 import { findingsOf, siteLimit, statedLimit } from "./make-finding.ts";
 import { shapeIsKnown } from "./shape-known.ts";
@@ -182,6 +182,10 @@ function judge(context: RuleContext, state: StepState): Finding[] {
 export const holdingRule: Rule = {
   number: 4,
   title: TITLE,
+  judge,
+};
+
+export const aboutHolding: RuleAbout = {
   asks: "Does the gap under the wafer as it is loaded stay within what the chuck's seal closes, and the bending at chuck, gripper and peel front below the design stress of its edge? Pressure is never the limit.",
   limits: [
     "sealGapPlainClear",
@@ -193,5 +197,4 @@ export const holdingRule: Rule = {
     "stressGround",
     "stressRelieved",
   ],
-  judge,
 };

@@ -8,7 +8,7 @@ import type { StepState } from "../flow/walk.ts";
 import { SILICON_DENSITY } from "../silicon/density.ts";
 import { formatNumber } from "../units/format-number.ts";
 import { againstUpperLimit, exceeds } from "./against-limit.ts";
-import type { Finding, FindingLimit, Rule, RuleContext } from "./finding.ts";
+import type { Finding, FindingLimit, Rule, RuleAbout, RuleContext } from "./finding.ts";
 import { findingsOf, siteLimit, statedLimit } from "./make-finding.ts";
 import { arealMass, carrierDensity, USUAL_GLASS_DENSITY } from "./mass.ts";
 import { shapeIsKnown } from "./shape-known.ts";
@@ -179,7 +179,10 @@ function judge(context: RuleContext, state: StepState): Finding[] {
 export const sagRule: Rule = {
   number: 5,
   title: TITLE,
+  judge,
+};
+
+export const aboutSag: RuleAbout = {
   asks: "Do sag under its own weight and warp together fit the slot or clearance, and the weight and total thickness of the pair the robot and aligner? Where this is stricter than the thickness rule, it decides.",
   limits: ["slotClear200", "slot200", "slotClear300", "slot300", "warpMargin"],
-  judge,
 };

@@ -6,7 +6,7 @@ import type { Outcome } from "../vocabulary.ts";
 import { bondBudget } from "./bond-budget.ts";
 import { bondChemistry } from "./bond-chemistry.ts";
 import { againstUpperLimit, exceeds, reaches } from "./against-limit.ts";
-import type { Finding, Rule, RuleContext } from "./finding.ts";
+import type { Finding, Rule, RuleAbout, RuleContext } from "./finding.ts";
 import { celsius, duration } from "./words.ts";
 
 const TITLE = "Bonding material";
@@ -116,7 +116,10 @@ function aboveSoftening(state: StepState, material: BondMaterial, softensAt: num
 export const adhesiveRule: Rule = {
   number: 6,
   title: TITLE,
+  judge,
+};
+
+export const aboutAdhesive: RuleAbout = {
   asks: "Does the bonding material stay below its temperature limit with its margin and hold time, and below the point where it flows; does it stand the vacuum, chemicals and light of every step between bond and debond, and all their heat together?",
   limits: ["adhesiveMargin", "weightLossClear", "weightLoss", "heatingFrom"],
-  judge,
 };

@@ -3,7 +3,7 @@ import type { BondState } from "../flow/bond.ts";
 import type { StepState } from "../flow/walk.ts";
 import { standardBow } from "../stoney/bow.ts";
 import { againstUpperLimit, exceeds } from "./against-limit.ts";
-import type { Finding, Rule, RuleContext } from "./finding.ts";
+import type { Finding, Rule, RuleAbout, RuleContext } from "./finding.ts";
 import { findingsOf, siteLimit, statedLimit, temperatureFigure } from "./make-finding.ts";
 import { releasePath } from "./release-path.ts";
 import { thinnest } from "./rule-01-thickness.ts";
@@ -166,7 +166,10 @@ function judge(context: RuleContext, state: StepState): Finding[] {
 export const carrierRule: Rule = {
   number: 7,
   title: TITLE,
+  judge,
+};
+
+export const aboutCarrier: RuleAbout = {
   asks: "Does the carrier match by the computed bow of the pair; does the light or solvent that lets it go pass it; does it fit the trimmed wafer, take the heat, hold and show on the tool, and have uses left?",
   limits: ["warpMargin", "flatWithin", "printThroughBelow"],
-  judge,
 };

@@ -2,7 +2,7 @@ import type { StepState } from "../flow/walk.ts";
 import { ROOM_TEMPERATURE } from "../laminate/layer.ts";
 import { supportRank } from "../vocabulary.ts";
 import { againstUpperLimit, exceeds } from "./against-limit.ts";
-import type { Finding, Rule, RuleContext } from "./finding.ts";
+import type { Finding, Rule, RuleAbout, RuleContext } from "./finding.ts";
 import { findingsOf, statedLimit, temperatureFigure } from "./make-finding.ts";
 import { peel } from "./peel.ts";
 import { againstExposures } from "./resistance.ts";
@@ -139,7 +139,10 @@ function remover({ steps }: RuleContext, state: StepState): Finding[] {
 export const debondRule: Rule = {
   number: 8,
   title: TITLE,
+  judge,
+};
+
+export const aboutDebond: RuleAbout = {
   asks: "Is a thin wafer on tape or ring before it leaves its carrier, never free between tape and frame; do the tape and the solder stand the debond's heat, the tape the remover, and the bumps the peel or slide?",
   limits: ["tapeTemperature", "solderMargin", "warpMargin"],
-  judge,
 };

@@ -5,7 +5,7 @@ import { bumpCover } from "../thickness-budget/bump-cover.ts";
 import { thicknessBudget, type ThicknessContribution } from "../thickness-budget/thickness-budget.ts";
 import { outcomeRank, type Outcome } from "../vocabulary.ts";
 import { againstLowerLimit, againstUpperLimit, exceeds } from "./against-limit.ts";
-import type { Finding, FindingLimit, Rule, RuleContext } from "./finding.ts";
+import type { Finding, FindingLimit, Rule, RuleAbout, RuleContext } from "./finding.ts";
 import { findingsOf, siteLimit } from "./make-finding.ts";
 import { hasBumps } from "./solder.ts";
 import { micrometres, percent } from "./words.ts";
@@ -213,7 +213,10 @@ function inBudget(
 export const coverRule: Rule = {
   number: 9,
   title: TITLE,
+  judge: (context, state) => [...covering(context, state), ...budget(context, state)],
+};
+
+export const aboutCover: RuleAbout = {
   asks: "Is what stands on the device side covered by adhesive or embedding layer, with enough left over it, and does the thickness variation of carrier, adhesive and grind stay within a tenth of the final silicon and the protrusion of its vias?",
   limits: ["coverShare", "coverLeft", "coverLeftClear"],
-  judge: (context, state) => [...covering(context, state), ...budget(context, state)],
 };

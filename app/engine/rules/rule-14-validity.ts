@@ -3,7 +3,7 @@ import type { StepState } from "../flow/walk.ts";
 import { siliconBiaxialModulus } from "../silicon/biaxial-modulus.ts";
 import { stoneyCurvature } from "../stoney/stoney.ts";
 import { reaches } from "./against-limit.ts";
-import type { Finding, Rule, RuleContext } from "./finding.ts";
+import type { Finding, Rule, RuleAbout, RuleContext } from "./finding.ts";
 import { findingsOf, siteLimit } from "./make-finding.ts";
 import { shapeIsKnown } from "./shape-known.ts";
 import { celsius, percent } from "./words.ts";
@@ -100,7 +100,10 @@ function judge(context: RuleContext, state: StepState): Finding[] {
 export const validityRule: Rule = {
   number: 14,
   title: TITLE,
+  judge,
+};
+
+export const aboutValidity: RuleAbout = {
   asks: "Is the answer within the range of the models: the laminate where thin-film formulas end, a shape that does not close, a pair below the softening of its bond where it is free?",
   limits: ["stoneyWithin", "flatWithin"],
-  judge,
 };

@@ -1,3 +1,4 @@
+import { unpackIntegers } from "../../packed-integers.ts";
 import type { Extent } from "./chebyshev.ts";
 
 /** Coefficients of one or several functions of a shape's place in the table, in the order of `eachTerm`. */
@@ -11,4 +12,19 @@ export interface ShapeTable {
    * two axes and then half their difference, and the mean height of the rim.
    */
   measures: { extent: Extent; quantum: number; values: readonly (readonly number[])[] };
+}
+
+/** A table as its file holds it: each list of coefficients as packed text. */
+interface PackedTable {
+  generator: number;
+  energy: { extent: Extent; quantum: number; values: string };
+  measures: { extent: Extent; quantum: number; values: readonly string[] };
+}
+
+export function unpackTable({ generator, energy, measures }: PackedTable): ShapeTable {
+  return {
+    generator,
+    energy: { ...energy, values: unpackIntegers(energy.values) },
+    measures: { ...measures, values: measures.values.map(unpackIntegers) },
+  };
 }
