@@ -10,54 +10,54 @@ export const ISOTROPIC: ShapeTable = unpackTable({
     extent: [20, 14, 6],
     quantum: 0.000001,
     values:
-      "/,-/.X,-/(>(+.(X(),<(/D)<(-)(G,-.I*,E-AW9,,*R+/V(8B;1./I++Q,100(-N,<4:1()A*Q(S0*3MI5*Q*17X(13OG0:1=1" +
-      "34-(-2)-,*I./*Q/)?(,Q([/)/A)+,9((SVF6--/V(-R(*Q(KC(((S),M*9)M:((@)KBI(.7-I)30)N/PQ9+M+X@)O)B7)S(8O:Q" +
-      "36()/*,P.,*1()/=(*C(OE.-+@-((4(()J()<(B*-*Q-*1+D*T7*-4/+8(-@*B@(/:()V+V(P(S(-@(6Z,7>6*U)E(6(D(YS=3G6" +
-      "7*+-*:-/-[(,-E/W(C9)((H)).:-8(47,*/S-+C-K6E-+R*,H)J)Q-+O()Q(6M.R*>(G()3,490+FV+9(8(W(V(IF(*.(:+,+[.*" +
-      "=)?0*-X((Q((=*[Q+,)O(+5L)D+(B(([+MS,-7-I(XD,V@*;(-Y(;;=*A@)GU(1P-)-D)(-[*(QV:*,,V+-N(C(GG()(S*(>.2(>" +
-      "(*F-U)A)=()A*6)N)5(7*=-G.V)3(ZY:);(7+(+H.([(*G(PN)/+J+-N-AS**D+-F*<)Z.W>(C.FN):-A)U)3C)L)I)M)T(C(,.6" +
-      "+*?(9N(*/Z.4)VE(+8**H-<(F.=,J*Z(,H.N*6)M*L*=-D*I5(Q//H)*K/K<.+B).5(,M[*)2*M/5),=/7(?.G()S*9E)C(>(O)B" +
-      "*.V)-1(X1),N((Y-6()S)9(V(+A.@*8/V(LE*R-;)O,/@3,S,*:,C-K+-X*1-3-I)0-U-A)0);-E(,3(JL+K,D)-C[(I+N(Z5,1)" +
-      ".D)R(K).B+1*)H8C+Z+A(>+O,[I(E)I(,M(U+7J((P)F/N)O(-TH)M+7*Q)9*G/M)1,X(T*Z-0(1;(O(H>>",
+      "o,ioa5,ioegerae5et,heo1theite[,iawn,yiv4f,,n>roSec0mlaowrr2,lsseix,h(dletvn2e!sn.Mw)n2nl:5el.+[sdlpl" +
+      ".(ieiuti,nwaon2ot;e,2eRotovtr,fee!S*=iioSei>en2e-beee!t,MnftMdee?t-0wea:iwt.stxo&2frMr5?t+t0:t!ec+d2" +
+      ".=eton,&a,nletopenbe+yair?iee(eetkethe0nin2inlr1n|:ni(orcei?n0?eodetSrSe&e!ei?e=L,:g=nTtye=e1eP!p.[=" +
+      ":nrindioiRe,iyo4ebftee]ttadice(:,no!irbi-=yir>n,]tkt2ir+et2e=Ma>nge[et.,(fsr*Srfece4eSew*enaedr,rRan" +
+      "pt;sni5ee2eepnR2r,t+er)/t1re0eeRrM!,i:iwe51,S?nmeiPemmpnv?t[Tel&iti1teiRne2Sdn,,Srixebe[[ete!negaueg" +
+      "en*iTtvtpetvn=txt)e:npi[aSt.eLPdtme:rer]aeRen[e&xtorkrixiv!nn1ri*nhtLa4geba*xtdivtTt.bt/twtMt|ebe,a=" +
+      "rn;efxenoLa(tSyercnn]ihe*ap,knLe,]axn=tMn/npi1nw)e2oo]tn-o-har0ta)e,MRntunMo)t,po:e;a[et!nfytbege+t0" +
+      "naStile5lt,xeePi=et!tfeServa?ncoSe/yn>imt+,o?.,!,nd,bi-ri5nli.iwtsiTivtstmiye,.ek/r-,1tibRewrxeL),lt" +
+      "a1t>e-ta0rlnt]cbrLrvegr+,Rweytwe,MeTr:kee&t*oxt+ei|]tMr:n2tfn[oMtl,5e|nLiselme+e]gg",
   },
   measures: {
     extent: [16, 11, 5],
     quantum: 0.00001,
     values: [
-      ")*.(M()2(-@F6*,-<(/J+YW5((.;(,7(8D0)/P/XW?(.;)E(B2.B(8G)A<4SVGU(@Y+,/;((+X).DX<*+(P(+7(*9W5()/=-INV+" +
-        ")P*:)QK)*I*W)>(+:)A(?)QZ)KT4(7)8(;-,Q(*-R(.Z26(+/[,(1K:.*D*)8(DH(+O)SM90-N)>(4+OU)P*>,K5(RL()6,*F+6K" +
-        "1)+-Y(*5+PT(++X.X*;8,+S(Q(@)+B*D(@.O*O.V*V-W*J,,1-VUK(-*5.D-0J-+J(.W,U+*?,X(R(*B*1-Q(9,>(:,C)H-?AAE-" +
-        "(E(+L-:*T(-M*C0()V(J+I)U+0(>2)?*-O)Z(;7(3((F(N(,G(*;)S(,4+8(*A+A.N)[)?(4P8.X)L,7)?/:,B/G+D)G)*9+F6*S" +
-        ")V:,=(?,@(D(?*H+F(FB@(;M8C)[/A)P,CSGB(>)F>*C(=(R)7(U(4(G=9OP3G=",
-      ".)+X+.G+531-[(:D20)-B(1C00GB00)4330572F50412010,/<,+;,U01*)<)U<40((B(162)69:2)X>4J06F1821010.,X),[*;" +
-        "809,UA4))S5<2)LG52(C46T14B1B410,)L)(C(U80(.Y)222/I5:0C77@;1:5:983)8*OC6(L->B0)4)ZB(TX2(8>D3<165)+H*3" +
-        "?4F*>1(;)T6)L65DBJ7<>(+9Q02)PP1(AH<PA(0688(-J(32(9(43)VH<:V1@,973,4@7J2H?X4+JA4(YC@:@5(?1*0D<2P)>1U6" +
-        "(6:(71(2QX9B9>6",
-      "**+,3*+H**J(4<,.,R-.0)C(U=(--O)(9*R(@0.*Z*)B(1S++C(A+:4)-D)<(=-O(@>(S)8(Q)G+8)W)/*/I)++R,.@):L/*,D(," +
-        "Y)/O)O?*+/M))AZ)8(*-R.N/3(O-.K/3-F+,<.[*S-K*@.9)<<*A-N*W((,/9)./H,)RTF+/<(.(;()M(A(+<+,8+H(N()[-Q+UU" +
-        "()[(,J-6)X(,[)M((F/<)(19,V)0))W(/*2))JM6,.(W-+;):V*.,8(+:-WX(--1,O(@-.X/4*T)-=()[)/R():)+K(*6/=,-V(:" +
-        "(C,*,?-J(-H(D*)*B*+K(-E(+.W(-@+<+-L+9))Q,3(/L*Z(.O.F.6+P)1(Q)*-9+,Z)+R,)@+)?((E*O*.B,6/[+9(*L)6(0-O(" +
-        "*,E+D,?O(G++V-H+/9+,U((;+-:(-B*/=(+9)-B.7)0)[(J)*X).P/P)+W(*C*,Z)(<*);(,F-U(*)=(.ZR(.[-<W)+=-;(.N):-" +
-        "E(*6,,>*0(H((2/3)5Q6/Y,-W/P*(MAPR*N),JF)O+=*B*=(-3+0)S(0+:,1)X([7S",
-      ")((.2(*,G()=25().A**V,4B2(,,RDS:0.[+4Z<(.:(411)19R+JC5@24496((,/H)(*?))I09(()9K,282+,4/9N:-E)ALD(.J(" +
-        "J2LI(4+BSN6O6;<,..:(+*I)(K67((,T*-7)72/.U/W22)/6.K)=8()K(Y0+V)7>(F(G)>8(;2*/)B((.W(+IF3+.P,PC0,+O(U(" +
-        "X2(-LY(EAA3+:Q(:(I(L(A(.R*-Q,[N,(B)*46;,O(+N)X(/0)@S,F)L*<=)DA(8(1++2(-U(5V-H*P[(-G()P(P((2)W(=*6(X(" +
-        "L(?)D(J(,Y(9(4F)*6)25)?*N)88)5.2(<5(V..6+3U(-J*XU))H)8)L>,4G)<++5,OC(-E)S9(*W)9([)M*@1,(X(<3*/2)<((B" +
-        ")X-LX)-G)U(+UT*;)1*T)*:(B/:(T+R(R-5(QP+5(H(73F(B4",
-      "),/.Q)(>)(<L6+*/>),<,=Y7(*/5(+S(ZH0*/Z(*0[C))E)E(P2((H(HK*3B4W(2M(1(J(3..(G(*-8*+D(6>+),L(.K(,G[7(,(" +
-        "W.A(2(0,(@*T*;O)/5+M)P(-D)U(I*9(6*3Z4(A)H(E,-;(,+<)*226)(*C-*Q(E6/.8*)Z(4H)+K+3U;(N.:)DD,M[*@*V-Q9)4" +
-        "R*.2,/T+:S1*),=(-1,LX(.+6/>+;6-,I)G(H).H*X(D/[+C((:+J/3+:/,I((0[O(.*E()Z.BR.*>)(Q-O+-I.:)4(+J*E.=(A-" +
-        "2(D-A)Z)9(03G-*Q)(>.D,2(/I*OP(,F(Z+Y*;+R(P6)U+.1*L(A9-5()V(T(-5(,C*;(-<,0(,E,9/X*CC(<TU/L*6/5*3((Z-0" +
-        "()7,J*9)/G,22)I*6:,U(O-P(L)=+:,:(ZF(3(?(O0S*1((5*6-C(1BL(:)<H*9(E(4)=(W(<)G<7EF;S;",
-      "((+)X-+[,E51(/5)6P20*/2(MK00(GJ42)P350=74R70814010)((F./1/E03+(X,7@60((X)182)FG>2+4@4X16L1<20210./@*" +
-        "/A+W80(+D.KK6)/Y(4H2,LA72)A>8(:32H3H400.+R),;)=<0(/1,8:4((S(DH05J3(B11@0D;:1(A,SG:((7/4J2)@*BHJ(86(L" +
-        "BB1D1:5+(T+IG4R*Z0)Y*B6*@372FV=>D)*WU34-H(L1)7(<B(TA(H:B<)+N(G6*7(R3+RV6F(47L.115.HN7>6JE(H8-HG6)WE(" +
-        "6DVC)92+ZH?5(6*>5)C<)2<(K0)D(A(6UP;J8",
-      "))((9)*8(.0L6***V*)B)MM5.+;/1)0F0)/L()Z?=(+O(7(D2.<(BA(YB4QTEU(<W+/-1((/J)-PZ:***X()3()?S5().I,?(<R+" +
-        "(H*:)GI))=*3):(*Z)=(;)A(0)CR4(5)4(9)*)?((/8(-B34(,);-.A*55+)0)(FJ>(+Y,[(G;*?,>(XV,3W)F*0,=7(PL(+2+-L" +
-        "+6I0)+)3(-[*>J(+(:*V*G4,+3)[V)*L)V(6.I*Q.R*J-I*F,(;(+<0C(+)7(+4-<L.,Z(+M,1*/5-Z(T(+H)5-?(5,B(8,9)D-L" +
-        ")T0C+/E(/6-J/8(*?)O(Z(*J(L*O(Q+4(<<)9+/;*F(=5(I((@(J(,O(*?)G(*Z+0()O*Y.>)K)P8P+;-H)J,;*K.8,2/E+4)=)-" +
-        "E+F3(M)F2,[)3,4Z(C*F,>(8D(I(U(353*;((5)Z+9A?:(J*H@*M(5)F(M)M(8QK@(5(2CC7",
+      "tnaeMetuei?*=n,iheokrP4)eeame,:ec1sto&o54;eamtye0ua0ec[tvh(!S[Te?Pr,omeer5ta15hnre&er:enf4)etopiwxSr" +
+        "t&ndt2-tnwn4tgerdtve;t2Lt-|(e:tcemi,2eni>eaLu=eroR,el-dan1ntce1]er+t!Mfsixtge(r+Tt&ng,-)e>/et=,n*r=-" +
+        "ltriPen)r&|err5a5nmc,r!e2e?tr0n1e?a+n+aSnSi4nk,,liST-ein)a1iskirkea4,Trn;,5e>en0nli2ef,ged,bt]i;vvyi" +
+        "eyer/idn|eiMnbsetSekrwtTrsegut;ni+tLem:e.ee*exe,[enmt!e,(rcenvrvaxtRt;e(&ca5t/,:t;od,0o[r1t[tnfr*=n!" +
+        "tSd,pe;,?e1e;n]r*e*0?emMcbtRovt&,b![0egt*gnbepe>t:eTe(e[pf+&.[p",
+      "atr5ra[r).liRed1usti0elbss[0sst(..s):u*)s(lusls,oh,rm,TslnthtTh(see0el=ut=fdut5g(ks=*lculslsa,5t,Rnm" +
+        "csf,Tv(tt!)hut/[)ueb(=|l(0l0(ls,t/tebeTcseaPtuuuow)dsb::?mld)dfc.tcn+b=e/ig0st(tL0e|5uecg1.hl=)tr]n." +
+        ";(*nglemt|=t/=)10k:hgerf2sut&&lev]h&ves=cceike.uefe(.tS]hdSl?,f:.,(?:ku];5(rkv(ePb?d?)e;lns1hu&tglT=" +
+        "e=de:leu25f0fg=",
+      "nnr,.nr]nnke(h,a,>iastbeTpeii+tefn>e?sanLnt0el!rrbevrd(ti1thepi+e?ge!tce2t[rct4tonowtrr>,a?td/on,1e," +
+        "Pto+t+;nroMttvLtceni>axo.e+ia-o.i*r,haRn!i-n?afthhnvixn4ee,oftao],t>|*roheaemetMeverhr,cr]exetRi2rTT" +
+        "etRe,ki=t5e,RtMee*ohtelf,Ststt4eonuttkM=,ae4irmtdSna,cerdi45eiil,+e?ia5o(n|tipetRto>etdtr-en=op,iSed" +
+        "eb,n,;ikei]e1ntn0nr-eiyera4ei?rhri/rftt2,.eo/nLea+a*a=r&tle2tnifr,Ltr>,t?rt;eeyn+na0,=oRrfen/t=esi+e" +
+        "n,yr1,;+e[rrSi]rofr,Teemridei0noperfti0a:tstRektn5ta&o&tr4enbn,Ltehntme,*iTentpeaL>eaRih4trpimeaxtdi" +
+        "yen=,,gnse]eeuo.t)2=oP,i4o&neMv&>nxt,k*t+rpn0npei.rst!esrd,lt5eR:!",
+      "teeauen,[etpu)etavnnS,(0ue,,>1!dsaRr(Lheade(lltlf>rkb)?u((f=ee,o]ten;ttwsfeetf-,ucur,(ofxdiytv/1eake" +
+        "ku/we(r0!x=+=mh,aadernwte-=:ee,|ni:t:uoaTo4uuto=a-tpcet-ePsrSt:ge*e[tgcemunot0eea4erw*.ra&,&bs,r+eTe" +
+        "5uei/Peyvv.rd2edewe/evea>ni2,Rx,e0tn(=m,+erxt5eost?!,*t/nhpt1vecelrrueiTe)Si]n&Rei[et&e&eeut4epn=e5e" +
+        "/e;t1eke,Pefe(*tn=tu)t;nxtcct)aueh)eSaa=r.Teikn5Ttt]tct/g,([thrr),+beiyt!fen4tfeRtMn?l,e5eh.nouthee0" +
+        "t5i/5ti[tTerT|nmtln|tnde0ode|r>e>i)e2&r)e]e:.*e0(",
+      "t,oa2tegteh/=rnogt,h,pP:eno)er!eL]snoLensRbttytye&uee]e]-n.0(4euMeleke.aae[enicnr1e=grt,/ea-e,[R:e,e" +
+        "4aveues,e?n|nm+to)rMt&ei1tTewnfe=n.L(evt]ey,ime,rhtnuu=tenbin2ey=oacntLe(]tr-r.Tmexadt11,MRn?nSi2ft(" +
+        ">nau,o|rd!lnt,peil,/5ear=ogrm=i,wt[e]ta]n5e1oRrbeedrko.rdo,weesR+eanyetLa0>angte2i+riwadt(erknyapevi" +
+        "ue1ivtLtfes.[in2tega1,ueown+&e,*eLrPnmr>e&=tTraln/evfi)etSe|ei)e,bnmeih,se,y,fo5nbbeh|To/n=o)n.eeLis" +
+        "et:,knfto[,uutwn=d,Te+i&e/tprd,deL*e.e;e+s!nlee)n=ibel0/edth]nfeye(tpe4eht[h:y*m!m",
+      "eert5irR,y)leo)t=&usnoueM-sse[k(ut&.)sp:(>:scl(slstee*aoloys.re5,:?=see5tlcut*[gur(?(5l=/lhusulsao?n" +
+        "ovr4cser1a--=toPe(]u,/v:utvgced.u].](ssar>t,mtphseol,cd(ee!e1]s)k.e0ll?s1mdlev,![dee:o(kut?n0]kec=e/" +
+        "00l1ld)re|rw[(>nLstPn0=n?.:u*Spg1tn4T.(i]e/lt:eh0e|ve]d0htrxe[=n:e>.r>S=*e(:/all)a]x:g=kye]ci][=t4ye" +
+        "=1SbtfurL];)e=ng)tbhtuhe-st1eve=T&mkc",
+      "tteeftnceas/=nnnSnt0tMM)armolts*sto/etL;per+e:e1uahe0veP0(2|yTeh4roileeokti&Ldnnn5et.et;!)etaw,;eh>r" +
+        "e]ndt[wttpn.tdenLtpemtvestb>(e)t(eftnt;eeocei0.(e,tmiavn))rtste*kgerP,Re[mn;,ge5S,.4t*ns,p:e&/eruri/" +
+        "r=wstrt.eiRngkerednSn[(,r.tRStn/tSe=awn2a>nkiwn*,emerhsbert:er(ih/a,LerM,lno)iLe|er]t)i;e),0ec,ft1i/" +
+        "t|sbroyeo=ikocen;t+eLenke/n+e2r(ehhtfromn*ep)ewee?eke,+en;t[enLrset+nPagt-t&c&rmi]tk,mn-ac,uoyr(tpti" +
+        "yr*.eMt*u,Rt.,(Lebn*,gec1eweTe.).nmee)tLrfv;dekn]?nMe)t*eMtMec2-?e)eubb:",
     ],
   },
 });

@@ -11,34 +11,34 @@ export const SILICON_100: { soft: ShapeTable; hard: ShapeTable } = {
       extent: [20, 14, 1],
       quantum: 0.000001,
       values:
-        "/*()-6./.3,//0),S(+3(=(3([,89G0:4)(),F--/K+*/J.(7.)J()=)L*3-3Q(07<2()/-+H,,>(**[++U(.A-[2)E((FM(ALD+" +
-        "(),D/.>-),I.(V)*E(*@,C*<-WC4P(--*H)*/R)./C/.F,.W(/:()17,V1OR/++4*,.B((.G(,Z);(4(BU*9CL++-J(/+<(.S,O(" +
-        ",<2+C+3,06(++6(*.D)-@(,K(,1)A*0(G3S(-,8-/D*+7(*=)-0E+C+Q*H-R+(J/)8(*A(/C0(RE(*,:-)N*-M(8(+Z,0)1,+3*6" +
-        "-)NP)(EE)8/(4**:*(7(E,D(9+-Q-G*,V*N/G+.0))N)(W(I)D),Q((S()L2)(D()H*9/?)M*B*:@[",
+        "oneti=aoa.,oost,!er.epe.eR,cf[sd(tet,*iio-rnokae:atketpt/n.i.2es:huetoir],,gennRrrTeaviRutyee*Mev/1r" +
+        "et,1oagit,waeStnyen?,bnhi4b(&eiin]tno>taoboa*,a4eodetl:,Sl+>orr(n,a0eea[e,Ltme(e0Tnfb/rrikeorhea!,+e" +
+        ",hurbr.,s=err=ena1ti?e,-e,ltvnse[.!ei,cio1nr:enptisyrbr2n]i>rekotcenveobse>yen,ditxniMecerL,stl,r.n=" +
+        "itx&teyytcoe(nndne:ey,1efri2i[n,Snxo[rasttxte4ewt1t,2ee!et/ute1et]nfo;tMn0nd?R",
     },
     measures: {
       extent: [16, 11, 1],
       quantum: 0.00001,
       values: [
-        ")),/Y*))F-.Y)-6((3+8A0IT5+)*W*,/D((.K+*B)*;()B4?W(<7(,)O((*S*-8)6)UR*<)?8@(+G),/Y(*,6,,Q)(L((C/8+K(>" +
-          ",/G(,-7-,R*-I(*X.9,X*CV/A,*Y*>+J,3)>(:S*)1*A+A(*6.U,0<(;-U?((B+C)FA)*W(I.A+V,3*0)N(0)3+>([.Y-19(37(R" +
-          "(KRP);(K48SZ?MA",
-        ".-.<)+1).D(1*X8R>230/-:+,R(+0,8*>(X(>T050((/T(/D)(3.P(L)2TV21.*Z(/W(Z)<*T(>(@L4.X/8)V,8*2(VTT0)-0R);" +
-          ",8(B(F<F((=(X(2>(X2J(.B)3)6(0)040,1.X)0)@NP->(9HP(<(7)Z)BDP)R<4L(AR2(>5:AB:",
-        "*)-/Q*.*0().;,,L)-Q(,<+=(2([)RQ*(*+U(((,:*-*?(+-Z.*U*-B(MD)E*Z(1(*,/?)*-Z,.C*-6-M;((R.S(TV.-O-)-5+()" +
-          "V(-.1.*F*,W*(B(-1,8+/G+-(=*(,P()-9,(T)*9(.V/G)X)3)),I*+4/P()A-D(T(K((/W)-5)-;**F)-A(*BRTF))Q*.0(,M.@" +
-          "*C(**=(([**O))F(/3((6,*2(*J-W()H)5,,E)/Q6(HC))D*J+A)Z(-9+A(F+4,E(:(K@(9",
-        "))*,@)-*3(-*P(+Q*)69,F(@FA4(*((B(N.(J/V))0((@/>+27C:-./<)*-:/)?-+T.R(-0*B+ZA6,)+V+,F)L),X(-F((V-D*T1" +
-          "+-B((,V-;*,2(,D()>+0*XC,-R(,R)(9),8((4.6(R)@R),4(,4)Y(+@H+6./>(+4(/6/2(+Z(XF*)?(+8(W,N(4*L,(H)/<-F-@" +
-          "/>(/;+?/4);)6)(0.>(C*6*W,<(8)@)1KP*BB",
-        "),(-[*./8(()5*,4(+M,LY3SZ7.,)7+++J(+*E,(N)-S(*D=K(1(F;(+,[(,)5,*Z+W(A;*T*58D)4***O(-(H-+E)+>()U((2,E" +
-          "(D((*Q(-,[.+>+)=(,F/E-N+;(2*W-*G,8*>+Y(Z(H(=+*5((5,Q(+F((K,P93.Q*9(*4-9*<W)/G(=/G-6,A*8)X9)E+2)9/O-O" +
-          "OE;(8(GNB)1)O27GZ;WE",
-        "())(Z*-Y+*RK->L(@H630),+Z-.X)(L/8,8+4)B(<230()+D+)X)/9(-:)X*V(J(>40()*N)+?-@)R-H)B)HX:/8F,>-D+T*6(F(" +
-          "61+*N,@)W/X)0)XHV(-M-D*B(J*@P(:)-:+A+H(Z*H>:-O(+V)V*4P(@/H)EZ(T(T(C,B*R6(0*NU:(:(S)@<(TQ@IP@",
-        ")(.)7),(T,.Q))>.;*LQ2ET9,,(A*,*Z(*(;+*0))[()@C2O(:;*(/U--U(*N,>)Y(2)D)3@@?)+,A(+-B,*=)+P((9/4+A(J,/C" +
-          "(**1.-D**W(-@-M,J*1(2L+.K*:,B+3)BPK++5.5-A/B.7+86)H(*?)[/6*Y)6Y)-=*0/I-<+S*F*B(;)W*Z(1.I+5<ED(T)11P)" +
-          "AO?<(EV=5=",
+        "tt,oPntt*iaPti=ee.rcvsw|)rtn4n,o1eea-rn0tnmet0(;4eh:e,t+een!nict=tT>nht;c?er[t,oPen,=,,2te/eebocr-eg" +
+          ",o[e,i:i,>niwen5af,5nbSov,nPngrk,.tged!ntlnvrven=aT,shemiT;ee0rbt*vtn4ewavrS,.nstxest.rgeRaPilfe.:e>" +
+          "e->&tme-(c!L;Mv",
+        "aiahtrlta1eln5c>gu.soidr,>ers,cnge5eg|s)seeo|eo1te.a&e/tu|SulanLeo4eLthn|ege?/(a5octS,cnueS||stis>tm" +
+          ",ce0e*h*eepe5euge5ukea0t.t=ests(s,la5tst?x&igef]&ehe:tLt01&t>h(/ev>ueg)dv0d",
+        "ntio2nansetam,,/ti2e,hrpeueRt>2nenrTeee,dnin;eriLanTni0eM1tynLelen,o;tniL,abni=iMmee>a!e|Sai+iti)ret" +
+          "Seialan*n,4ne0eil,cro[riepne,&etif,e|tnfeaSo[t5t.tt,wnr(o&etvi1e|e-eeo4ti)timnn*tiven0>|*tt2nase,Ma?" +
+          "nbennpeeRnn+tt*eo.ee=,nuenki4et]t),,yto2=e]btt1nkrvtLeifrve*r(,yede-?ef",
+        "ttn,?tin.ein&er2nt=f,*e?*v(enee0exaekoSttsee?ogru:bdiaohtnidot;ir|a>eisn0rLv=,trSr,*t/t,5ei*eeSi1n|l" +
+          "ri0ee,Simn,ue,1etgrsn5b,i>e,>teft,cee(a=e>t?>t,(e,(tPer?]r=aoger(eo=ouerLe5*nt;erce4,xe(n/,e]tohi*i?" +
+          "ogeomr;o(tmt=tesagebn=n4,hect?tl-&n00",
+        "t,eiRnaoceet)n,(erM,/P.!L:a,t:rrrkerny,exti!en1p-ele*mer,Re,t),nLr4evmn|n)c1t(nnn+eie]irytrgetTeeu,y" +
+          "e1een2ei,Rargrtpe,*oyixrmeun4in[,cngrPeLe]eprn)ee),2er*ee-,&f.a2nfen(ifnh4to[epo[i=,vnct5ftyrutfo+i+" +
+          "+ymece[x0tlt+u:[Lm4y",
+        "etteLniPrn>-ig/e?]=.st,rLia5te/oc,cr(t0ehu.setr1rt5tofeidt5nSekeg(setnxtr;i?t>i]t0t]5doc*,gi1r|n=e*e" +
+          "=lrnx,?t4o5tst5]SeiMi1n0ekn?&edtidrvr]eLn]gdi+erStSn(&e?o]tyLe|e|eb,0n>=esnxTdede!t?he|2?w&?",
+        "teat:t,e|,a2ttgamn/2uy|f,,evn,nLenemrnsttRet?bu+edmneoTiiTenx,gtPeut1t.??;tr,veri0,nptr&eefo(rvek,ob" +
+          "ennlai1nn4ei?iM,knleu/ra-nd,0r.t0&-rr)a)ivo0a:rc=t]en;tRo=nPt=Ptipnsowihr!n*n0emt4nLelawr)hy1e|tll&t" +
+          "v+;heySp)p",
       ],
     },
   }),
@@ -48,34 +48,34 @@ export const SILICON_100: { soft: ShapeTable; hard: ShapeTable } = {
       extent: [20, 14, 1],
       quantum: 0.000001,
       values:
-        "/*,.)B))/(M,.*R.)M),T(*[C*G+:(43;60(,+/P/+/A-..@(-+;)-4(O((>(3)9+1(UU80(*-).L()))R)./;(+*6)+2O)C*9.B" +
-        ")8Y82*.+*>,(-@,(-;-(X,)W)+B+U+F*C)Y)U:(+-/N+*K+-(1.*:+/A(-6()Y(N+J(V(EJ-)+T*/,0(,+M)*V((9,6,1NG)=(A+" +
-        "*+F*-(@))B-G(*TB*R)A,<?(.,L().B**@((X)(R+?G)9>)A(**:(/)Z*.V*/G[-H)R(C)B+(8(+=.@)(P()L(1*W)3-/Z(,*L+." +
-        ">*+?+Q/P)F3-(1()E)*@)N>*I)+D(((F)+8(,E,1,0+D+(;.S()X(L,:+*R(.T)9(A*2))3,U+VD(-@-L*V,A=G*4)D",
+        "on,at0ttoeM,an>atMt,|enRbn[rde(.m=se,ro&oroviaa?eirmti(e+eege.tfrleTTcsenita/ettt>taomern=tru+tbnfa0" +
+        "tcPcunarng,ei?,eimie5,t4tr0rTr*nbtPtTderioxrn-rielandrovei=etPexrkeSeykitr|no,se,rMtnSeef,=,lx[tpevr" +
+        "nr*nie?tt0i[en|0n>tv,h;ea,/eta0nn?ee5te>r;[tfgtvenndeotLnaSno[Ri]t>ebt0recerpa?te&et/eln4t.ioLe,n/ra" +
+        "gnr;r2o&t*.ieletytn?txgnwtr1eee*trce,y,l,sr1rema!et5e/,drn>ea|tfevnutt.,TrS1ei?i/nS,vp[n(t1",
     },
     measures: {
       extent: [16, 11, 1],
       quantum: 0.00001,
       values: [
-        "),+)E+(/T(+,[*/8))Q-@)A;(;(4=-*(K*,,2(,*G,)0*([/X(G(7(G(JG((,Y(-)E./T(-QL*?*T+99>(+<)-(;(,-2,.U)+B(," +
-          "9/T-A(>,)S(/(1..2+,=(.0(*K.>,=(@*C..O((:)Y*5S)4)9*/A.Y(/=(.8(+W,>(Q-Y6(+W(*N()3*B)A)+I/G()E-H+Y(J(L+" +
-          "<*Q*2)W/3-K*=)VM(6IF(5C+O5U04B(CA",
-        ".()@(E)*V)W(0O61010-)@()H.D6(FO50110.,ZC)+3;)M49:10+/R(/A(+?W(1?=63C+O(I(I=C725)+4)A*I0K556(-OH*?@47" +
-          "5(-LH(H(A2;:-CN:8R;+F5I(5I)I5I8B)@DVK(GWWLL:;=1",
-        "*,*,K.).<)*/Q((+J,+Q)(N-11*O*@Y*(,.9/*/J+(-9(,*V/*I*)4)[)S+=+V(I()+-G*.J)/>/;/Q((3(,8(+=4(2(/;,-*7*-" +
-          "-P(--S-->++3*)V))=+B+?-).;*+*N(,-S,-J*/O),N(-K*V(,H*(*C-+6(/G+S*C-R,S(*)7)+=,-9,)0+(3(-H*9/O)*0*.5+/" +
-          "0*+7((D,3()*E),E+,Q)*6(-G,L*)F)/0.O(+2((M+*U*,Q(*Q,<(?((H*<)FI+7((;(;(W*M(Z(T)9(Q",
-        "(/,)F.*;(*-2)([()B+U)J70C4()((N(..S+*X))7/F,W(8:QM:,,.V+/@()-O+H)(7X(Y(Z(53*/.Z-(B./3/Z((M(2([(X(;,>" +
-          ")B*)7G)7Y9VW*.B(W*(A*A(W([5H))C))6(*3*?(P(Y3-)Z()2.B.MZ(M(:*+1)-G()=,9)8(M*)0**BF(S(;(,I(.U+E)C(P-V-" +
-          "0J)W(LY)9+K9(W)JN(C",
-        ").,*;+/,D(-.Y,(F)-I/<)W7(E(<?((+.5++,D(..I-)@*-M(*2(G(;(O(VK((+=))(G((,L),I)T+G,2,17B+,>*+*I(/.8.(G)" +
-          "/F(.7()N.C(J/(M)(,I/.H+/A(/N(+K/F-3(JS/(O((T(U*KI)H)I+/C(,=(/;(/P(-E-8(O+3(1(.3(-2(*K+:)O*)Q-U(+?/B-" +
-          "9):)F*R+Q*H*3/[.W)S*2O(814UQ,M4I48:(K=",
-        "(()*D(+1*)R,IT(C23010)(*J()>-:(ST(MI5330/+H((6*+Y5,9AM:11.(H(/3(/W(O(U(5M43-=))5*U+Y(1(=A05+(D,M-K(?" +
-          "(YKA8).Y)B-=FIA?)*<)9(@)UCM</;(25CZG,J(IY(I(5*K(:(K2D)X(G(8(9(Q1(AF88;=5",
-        "))/)3*/)B((-3*-P(/7,Z(Y;(7(0=,,-S*+,2(++=+.B).W/D(?(5(A(FE)+,E(-,Y+.V(-=)G)Y*H*Y7>(+J),)K(+*0,,Y))J(" +
-          "+?/B,[(<,(Q(-,Y/*J+*9(-P()[.2,3(<((6-.=(*F)9*3O)2)5,(9-E(/1(-:(+7,4(GI)O()5()H((G*8(Y)-7,M((W-2+G(H(" +
-          "R)<*?)Z*C/=,9*S):M(F(M(P[U*AKMAH>(7A",
+        "t,rtyreo|er,Rnoctt2i?tvmeme(pine-n,,ue,n[,tsneRo5e[e:e[ek[ee,Peityao|ei2/n;n|rffgerhtieme,iu,aTtr0e," +
+          "fo|iveg,t!eoelaaur,peasen-ag,pe?nbaa+eedtPn)!t(tfnovaPeopeacer4,ge2iP=er4enxet.n0tvtrwo[etyi]rPeke/r" +
+          "hn2nut4o.i-nptSMe=w*e)br+)Ts(0ebv",
+        "aet?eytnSt4es+=lslsit?et]a1=e*+)sllsa,Lbtr.mtM(fdlsro>eover;4el;p=.br+ewewpb:u)tr(tvnws-))=ei+]n;?(:" +
+          ")ei/]e]evumdibxdc>mr*)we)wtw)wc0t?1S-e[44//dmpl",
+        "n,n,-atahtno2eerk,r2texilln+n?Pne,afonokreife,nSonwnt(tRt!rprSewetri[naktogomo2ee.e,cerp(eueom,in:ni" +
+          "i&eii!iigrr.ntSttpr0r;itamnrnxe,i!,ikno+t,xei-nSe,]nenbir=eo[r!nbi>,!ent:trp,if,tsre.ei]nfo+tnsna)ro" +
+          "snr:ee1,.etnyt,yr,2tn=ei[,/nt*tosa+erueeMrnTn,2en2,he;ee]nht*wr:eememe4nMeLe|tfe2",
+        "eo,t*anmeniuteRet0rTtk:sb(eteexeaa!rn5tt:o*,4ecd2Md,,aSro?eti+r]te:5ePeLe).noaLie0ao.oLeeMeueRe5em,g" +
+          "t0nt:[t:PfS4na0e4nevnve4eR)]ttbtt=en.n;e&eP.itLetua0aMLeMednrlti[etp,ftceMntsnn0*e!eme,weaTrytbe&iSi" +
+          "skt4e/Ptfr-fe4tkxeb",
+        "ta,nmro,1eiaP,e*tiwoht4:eyeh;eera)rr,1eaawit?niMenue[eme+eS-eerptte[ee,/t,wt|r[,u,l:0r,gnrnweoacae[t" +
+          "o*ea:etxabekoeMte,woa]roveoxer-o*i.ek!oe+ee|eTn-wt]twrobe,peomeo&eiyice+r.elea.eiuen-rdt+nt2iTer;o0i" +
+          "ftdt*n>r2n]n.oRa4t!nu+ecl(T2,M(w(cde-p",
+        "eetn1erlnt>,w|ebu.slstenketgide!|eMw)..sor]ee=nrP),fvMdllae]eo.eo4e+eTe)M(.iptt)nTrPelepvs)re1,Mi-e;" +
+          "eP-vctaPt0ip*wv;tnhtfe?tTbMhomeu)bL[,kewPewe)n-ede-u1t5e[ecefe2lev*ccmp)",
+        "ttot.not0eei.ni&eo:,LePme:esp,,i!nr,uerrpra0ta4o1e;e)eve*ytr,yei,PraSeipt[tPn]nP:gerkt,t-erns,,Pttke" +
+          "r;o0,Reh,e2ei,Ponkrnfei&etRau,.ehee=iapen*tfn.+tut),efiyeoleider:,(e[wt+et)et]ee[ncePti:,Mee4iur[e]e" +
+          ">thn;tLnbop,fn!tdMe*eMe&RTnv-Mv]ge:v",
       ],
     },
   }),
