@@ -3,13 +3,16 @@ import { EstimateRefused, estimating } from "./estimate-answer.ts";
 import type { PanelRequests, StackPanel } from "./stack-panel.ts";
 import type { Estimated } from "./stack-words.ts";
 
+/** A stack that the engine cannot take; the message is a sentence for the person who typed it. */
+export class PanelRefused extends Error {}
+
 /** Lets the page paint and take what was typed. */
 const breath = () => new Promise<void>((resolve) => setTimeout(resolve));
 
 /**
  * The panel of a stack as the server would make it, by the same code, in parts between which the page stays free; without the
  * workings, which are made where they are looked at.
- * @throws Error with a sentence for the person who typed the stack; the signal's reason when it was called off
+ * @throws PanelRefused for what the engine cannot take, the signal's reason when it was called off
  */
 export async function livePanel(
   { room, hot }: PanelRequests,
@@ -34,6 +37,6 @@ function nextOf(run: ReturnType<typeof estimating>) {
     return run.next();
   } catch (error) {
     if (!(error instanceof EstimateRefused)) throw error;
-    throw new Error(`This stack cannot be estimated: ${error.faults[0]?.detail ?? "the engine refused it"}.`);
+    throw new PanelRefused(`This stack cannot be estimated: ${error.faults[0]?.detail ?? "the engine refused it"}.`);
   }
 }

@@ -44,7 +44,7 @@ export function StackEditor(props: Props) {
   const draft = stackDraft(typed, choices);
   const [at, setAt] = useState(view.at);
   const { temperature, read } = viewTemperature(at);
-  const live = useLiveEstimate(panelRequests(draft, temperature), props.panel);
+  const live = useLiveEstimate(panelRequests(draft, temperature), props.panel, limits);
   const focusPart = useCallback((part: CutPartOf) => {
     focusField(part === "silicon" ? "siliconThickness.value" : `layers[${part}].film`);
   }, []);

@@ -28,7 +28,7 @@ export function StackFindings({ name, draft, panel, overlay, limits, options }: 
       <BowModels estimated={panel.room} />
       <WarpSpread estimated={panel.room} />
       <AssumedInputs draft={draft} />
-      <StackWorkings working={panel.room.answer.working} names={turnFront(draft.layers).map((layer) => layer.name)} />
+      <StackWorkings estimated={panel.room} names={turnFront(draft.layers).map((layer) => layer.name)} />
     </>
   );
 }
