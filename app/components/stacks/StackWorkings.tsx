@@ -1,4 +1,4 @@
-import { useState, type ReactNode } from "react";
+import { memo, useState, type ReactNode } from "react";
 import { WorkingView } from "#app/components/working/WorkingView.tsx";
 import type { Estimated } from "#app/lib/stack-words.ts";
 import { useWorkings, type Workings } from "./use-workings.ts";
@@ -10,7 +10,7 @@ interface Props {
 }
 
 /** The calculations behind the figures, folded away until asked for: what was typed since is worked out only then. */
-export function StackWorkings({ estimated, names }: Props) {
+export const StackWorkings = memo(function StackWorkings({ estimated, names }: Props) {
   const [asked, setAsked] = useState(false);
   const { workings, failed } = useWorkings(estimated, asked);
   const fold = (words: string, of: (workings: Workings) => ReactNode) => (
@@ -49,4 +49,4 @@ export function StackWorkings({ estimated, names }: Props) {
         )}
     </section>
   );
-}
+});
