@@ -1,6 +1,6 @@
 import type { Layer } from "../laminate/layer.ts";
 import type { LaminateBalance } from "../laminate/solve-laminate.ts";
-import { freeWaferShape, type FreeWaferShapeInput } from "../plate/free-wafer-shape.ts";
+import { reachedWaferShape, type FreeWaferShapeInput } from "../plate/free-wafer-shape.ts";
 import type { FaceUp, ShapeRegime, ShapeWord } from "../vocabulary.ts";
 import { waferConstants } from "./silicon.ts";
 import type { UnequalCurvature } from "./unequal.ts";
@@ -55,7 +55,7 @@ export function lyingShape(
     // The crystal's preferred axes matter for silicon alone; a pair is governed by its isotropic partner too.
     crystal: bonded || wafer.orientation !== "100" ? undefined : "100",
   };
-  const shape = freeWaferShape(disc);
+  const shape = reachedWaferShape(disc);
   return {
     temperature,
     linearCurvature: unequal?.principal.major ?? solution.curvature,

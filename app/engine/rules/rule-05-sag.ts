@@ -1,6 +1,6 @@
-import { gravitySag, type GravitySagInput } from "../gravity/gravity-sag.ts";
+import { carriedSag, type GravitySagInput } from "../gravity/gravity-sag.ts";
 import { siliconSagConstants } from "../gravity/silicon-sag-constants.ts";
-import type { Support } from "../gravity/support.ts";
+import type { CarryingSupport } from "../gravity/support.ts";
 import type { Clamping } from "../flow/handling-inputs.ts";
 import type { LyingShape } from "../flow/shape.ts";
 import type { WaferState } from "../flow/state.ts";
@@ -25,7 +25,7 @@ const LEDGES_AT = 0.9;
 const PINS_AT = 0.7;
 
 /** What carries the wafer: ledges in a store, else as the tool clamps; null where it lies on a plate. */
-function supportOf(clamping: Clamping | null, inSlots: boolean, radius: number): Support | null {
+function supportOf(clamping: Clamping | null, inSlots: boolean, radius: number): CarryingSupport | null {
   switch (clamping) {
     case "ledges":
     case "boat":
@@ -39,14 +39,7 @@ function supportOf(clamping: Clamping | null, inSlots: boolean, radius: number):
   }
 }
 
-const WORDS: Record<Support["kind"], string> = {
-  rails: "on two ledges",
-  points: "on three points",
-  "edge-ring": "on a ring",
-  ring: "on a ring",
-  "centre-point": "on its centre",
-  "centre-cup": "on a cup",
-};
+const WORDS: Record<CarryingSupport["kind"], string> = { rails: "on two ledges", points: "on three points" };
 
 /** Clearance that sag and warp may take, with the margin below it that is a caution; null where none is known. */
 function clearanceOf({ flow, limits }: RuleContext, state: StepState, inSlots: boolean) {
@@ -62,8 +55,10 @@ function clearanceOf({ flow, limits }: RuleContext, state: StepState, inSlots: b
     : { limit: siteLimit(limits, "slot200"), margin: limits.slot200.value - limits.slotClear200.value };
 }
 
+type CarriedPlate = GravitySagInput & { support: CarryingSupport };
+
 /** The plate that sags: silicon at its thinnest, or a pair by its effective thickness and its own weight. */
-function plateOf({ flow }: RuleContext, state: StepState, shape: LyingShape, support: Support): GravitySagInput {
+function plateOf({ flow }: RuleContext, state: StepState, shape: LyingShape, support: CarryingSupport): CarriedPlate {
   const { diameter, orientation } = flow.wafer;
   const { youngsModulus, poissonsRatio } = siliconSagConstants(orientation, support);
   const paired = state.after.bond !== null;
@@ -78,7 +73,7 @@ function sagging(context: RuleContext, state: StepState, shape: LyingShape): Fin
   const support = supportOf(state.step.equipment?.clamping ?? null, inSlots, context.flow.wafer.diameter / 2);
   if (!clearance || !support) return [];
   const plate = plateOf(context, state, shape, support);
-  const sag = gravitySag(plate);
+  const sag = carriedSag(plate);
   const least = sag.largeDeflection?.low ?? sag.peakToValley;
   const most = sag.peakToValley;
   const paired = state.after.bond !== null;

@@ -1,4 +1,4 @@
-import { freeWaferShape } from "../plate/free-wafer-shape.ts";
+import { reachedWaferShape } from "../plate/free-wafer-shape.ts";
 import { firstOrderSpread, type FirstOrderSpread } from "../uncertainty/first-order-spread.ts";
 import type { ScalarModel } from "../uncertainty/model.ts";
 import type { UncertainQuantity } from "../uncertainty/quantity.ts";
@@ -43,7 +43,7 @@ export function warpModel(stack: StackInput): { inputs: UncertainQuantity[]; mod
     model: (values) => {
       const copy = { ...stack, wafer: { ...stack.wafer }, films: stack.films.map((film) => ({ ...film })) };
       parts.forEach(({ put }, n) => put(copy, values[n] ?? 0));
-      return freeWaferShape(freeDisc(copy).disc).warp;
+      return reachedWaferShape(freeDisc(copy).disc).warp;
     },
   };
 }

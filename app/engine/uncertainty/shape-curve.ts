@@ -1,5 +1,5 @@
 import { criticalLinearCurvature } from "../plate/critical-load.ts";
-import { freeWaferShape, type PlateInput } from "../plate/free-wafer-shape.ts";
+import { reachedWaferShape, type PlateInput } from "../plate/free-wafer-shape.ts";
 import { arcSagitta } from "../stoney/bow.ts";
 
 /** The shape of a free disc that bends alike in both directions, as functions of its curvature by small-deflection theory. */
@@ -28,7 +28,7 @@ export function shapeCurve(disc: Omit<PlateInput, "thickness">): ShapeCurve {
   const thin = { ...disc, radius: 1, thickness: 1e-9 };
   const scale = 4 * thin.thickness;
   const onset = criticalLinearCurvature(thin) / scale;
-  const at = (load: number) => freeWaferShape({ ...thin, linearCurvature: load * scale });
+  const at = (load: number) => reachedWaferShape({ ...thin, linearCurvature: load * scale });
   const major = new Float64Array(BEFORE + BEYOND + 1).fill(NaN);
   const high = major.slice();
   const solve = (n: number) => {
@@ -44,7 +44,7 @@ export function shapeCurve(disc: Omit<PlateInput, "thickness">): ShapeCurve {
     return below + (position - n) * ((curve[n + 1] ?? below) - below);
   };
   const asked = (curvature: number, thickness: number) =>
-    freeWaferShape({ ...disc, thickness, linearCurvature: curvature });
+    reachedWaferShape({ ...disc, thickness, linearCurvature: curvature });
   return {
     sagitta(curvature, thickness) {
       const perLoad = (4 * thickness) / (radius * radius);
