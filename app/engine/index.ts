@@ -84,8 +84,8 @@ export { warpModel, warpUncertainty } from "./stack/warp-uncertainty.ts";
 export type { Measured } from "./measured.ts";
 export type { FlowInput, StepInput } from "./flow/model.ts";
 export { walkFlow, type StepState, type WalkOptions } from "./flow/walk.ts";
-export { assessFlow } from "./flow/assess.ts";
-export { judgeFlow, type AssessedStep, type FlowAssessment, type Verdict } from "./flow/judge.ts";
+export { assessFlow, type FlowAssessment } from "./flow/assess.ts";
+export { judgeFlow, type AssessedStep, type JudgedFlow, type Verdict } from "./flow/judge.ts";
 export { answerSentences, supportSpans } from "./flow/answer.ts";
 
 // Handling rules

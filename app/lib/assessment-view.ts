@@ -1,6 +1,6 @@
 import type { TitleBlockFields } from "#app/components/drawings/TitleBlock.tsx";
 import { tightestStep } from "#app/engine/flow/answer.ts";
-import type { AssumedInput } from "#app/engine/flow/judge.ts";
+import type { AssumedInput } from "#app/engine/flow/assess.ts";
 import type { ReleaseMethod } from "#app/engine/flow/model.ts";
 import type { Finding } from "#app/engine/rules/finding.ts";
 import { formatWithUncertainty } from "#app/engine/units/format.ts";

@@ -278,7 +278,9 @@ test.describe("bad input", () => {
     await expect(page.getByText("Stress outside −2000 to +1500 MPa")).toBeVisible();
     await field(page, "layers[0].thickness.value").fill("30 µm");
     await expect(page.getByText("Thicker than a tenth of the silicon")).toBeVisible();
+    const saved = page.waitForResponse((response) => response.request().method() === "POST");
     await save(page).click();
+    await saved;
     await expect(page.getByRole("alert")).toHaveCount(0);
     await page.reload();
     await expect(field(page, "layers[0].stress.value")).toHaveValue("-2500 MPa");
@@ -327,15 +329,18 @@ test.describe("bad input", () => {
     expect((await page.goto(path))?.status()).toBe(200);
   });
 
-  test("while the engine cannot be loaded keeps the old figures and offers another try", async ({ page }) => {
+  test("where the engine cannot be loaded asks the server, and keeps the old figures while that cannot be reached", async ({
+    page,
+  }) => {
     const { path } = await makeStack(page, "offline");
-    await page.route("**/assets/live-panel-*.js", (route) => route.abort());
+    await page.route("**/assets/live-panel-*.js", (route) => route.fulfill({ status: 404 }));
+    await page.route("**/api/v1/estimates", (route) => route.fulfill({ status: 401, body: "{}" }));
     await page.goto(path);
     await field(page, "siliconThickness.value").fill("150 µm");
     const status = answerOf(page).getByRole("status");
-    await expect(status).toContainText("The engine did not load.");
+    await expect(status).toContainText("You are signed out.");
     await expect(answerOf(page)).toContainText("At 200 µm it");
-    await page.unroute("**/assets/live-panel-*.js");
+    await page.unroute("**/api/v1/estimates");
     await status.getByRole("button", { name: "Try again" }).click();
     await expect(answerOf(page)).toContainText("At 150 µm it");
   });

@@ -1,6 +1,8 @@
 import { useCallback, useEffect, useState } from "react";
 import type { SiteLimits } from "#app/engine/rules/limits.ts";
+import { postEstimate } from "#app/lib/post-estimate.ts";
 import { panelKey, type PanelRequests, type StackPanel } from "#app/lib/stack-panel.ts";
+import type { Estimated } from "#app/lib/stack-words.ts";
 
 /** How long nothing may be typed before it is computed, ms. */
 const PAUSE = 120;
@@ -8,7 +10,6 @@ const PAUSE = 120;
 /** The engine comes after the page, and only to pages that compute. */
 const engine = () => import("#app/lib/live-panel.ts");
 
-const NOT_LOADED = "The engine did not load. Check the connection; nothing that you typed is lost.";
 const BROKEN = "It could not be worked out here; nothing that you typed is lost.";
 
 interface Live {
@@ -69,12 +70,23 @@ async function compute(
   signal: AbortSignal,
 ): Promise<StackPanel | { sentence: string }> {
   const loaded = await engine().catch(() => null);
-  if (!loaded) return { sentence: NOT_LOADED };
   try {
-    return await loaded.livePanel(requests, limits, signal);
+    return await (loaded ? loaded.livePanel(requests, limits, signal) : askServer(requests, signal));
   } catch (error) {
-    if (error instanceof loaded.PanelRefused) return { sentence: error.message };
+    if (!loaded || error instanceof loaded.PanelRefused) return { sentence: messageOf(error) };
     if (!signal.aborted) reportError(error);
     return { sentence: BROKEN };
   }
 }
+
+/** The server works it out where the engine did not come, as after an update of the server while the page was open. */
+async function askServer({ room, hot }: PanelRequests, signal: AbortSignal): Promise<StackPanel> {
+  const ask = async (request: PanelRequests["room"]): Promise<Estimated> => ({
+    request,
+    answer: await postEstimate(request, signal),
+  });
+  const [roomAnswer, hotAnswer] = await Promise.all([ask(room), hot && ask(hot)]);
+  return { room: roomAnswer, hot: hotAnswer };
+}
+
+const messageOf = (error: unknown) => (error instanceof Error ? error.message : BROKEN);

@@ -4,7 +4,6 @@ import { requiredAt } from "../rules/rule-01-thickness.ts";
 import { RULES } from "../rules/rules.ts";
 import { outcomeRank, supportRank, type Outcome, type SupportClass } from "../vocabulary.ts";
 import type { FlowInput } from "./model.ts";
-import { statedInputs } from "./stated-inputs.ts";
 import { flowUncertainty, type Contribution } from "./uncertainty.ts";
 import { walkFlow, type StepState } from "./walk.ts";
 
@@ -25,19 +24,10 @@ export interface Verdict {
   rule: number | null;
 }
 
-export interface AssumedInput {
-  step: number;
-  what: string;
-}
-
-export interface FlowAssessment {
+export interface JudgedFlow {
   steps: AssessedStep[];
   findings: Finding[];
   verdict: Verdict;
-  /** inputs that nobody measured or looked up */
-  assumed: AssumedInput[];
-  /** how many inputs there are, assumed ones included */
-  inputs: number;
 }
 
 /** The worst of some findings; clear when there are none. */
@@ -59,22 +49,17 @@ function supportNeeded(context: RuleContext, state: StepState, findings: Finding
 }
 
 /**
- * Walks a flow, judges every rule at every step and gives the verdict: an assessment whose figures have no workings unless the
- * builders of these are handed in, so that a page which shows none need not load them.
+ * Walks a flow, judges every rule at every step and gives the verdict. Figures have no workings unless the builders of these are
+ * handed in, so that a page which shows none need not load them.
  * @throws EngineInputError when an input cannot be computed with; nothing that could not be computed counts as passed
  */
-export function judgeFlow(
-  flow: FlowInput,
-  limits: SiteLimits,
-  workings: RuleContext["workings"] = null,
-): FlowAssessment {
+export function judgeFlow(flow: FlowInput, limits: SiteLimits, workings: RuleContext["workings"] = null): JudgedFlow {
   const { steps } = walkFlow(flow, limits);
   const uncertainty = flowUncertainty(flow, limits);
   const context: RuleContext = { flow, limits, steps, uncertainty, workings };
   const findings = steps.flatMap((state) => RULES.flatMap((rule) => rule.judge(context, state)));
   const outcome = worstOutcome(findings);
   const first = findings.find((finding) => finding.outcome === outcome);
-  const inputs = statedInputs(flow);
   return {
     steps: steps.map((state, index) => ({
       state,
@@ -89,7 +74,5 @@ export function judgeFlow(
       step: outcome === "clear" ? null : (first?.step ?? null),
       rule: outcome === "clear" ? null : (first?.rule ?? null),
     },
-    assumed: inputs.flatMap(({ step, what, source }) => (source === "assumed" ? [{ step, what }] : [])),
-    inputs: inputs.length,
   };
 }

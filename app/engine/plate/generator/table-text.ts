@@ -1,5 +1,5 @@
 import { packIntegers } from "../../packed-integers.ts";
-import type { ShapeTable } from "../table/shape-table.ts";
+import { overBow, type ShapeTable } from "../table/shape-table.ts";
 import type { Errors, ErrorsByClass, OnsetErrors } from "./check.ts";
 
 /** Characters of a packed list in a line. */
@@ -16,7 +16,7 @@ function literal(table: ShapeTable, indent: string): string {
   const inner = `${indent}  `;
   const head = (one: { extent: readonly number[]; quantum: number }) =>
     `${inner}  extent: [${one.extent.join(", ")}],\n${inner}  quantum: ${one.quantum},\n`;
-  const lists = measures.values.map((values) => `${filled(values, `${inner}    `)},\n`);
+  const lists = overBow(measures.values).map((values) => `${filled(values, `${inner}    `)},\n`);
   return [
     `unpackTable({\n${inner}generator: ${table.generator},\n`,
     `${inner}energy: {\n${head(energy)}${inner}  values:\n${filled(energy.values, `${inner}    `)},\n${inner}},\n`,

@@ -31,14 +31,12 @@ export const SILICON_100: { soft: ShapeTable; hard: ShapeTable } = {
         "ttn,?tin.ein&er2nt=f,*e?*v(enee0exaekoSttsee?ogru:bdiaohtnidot;ir|a>eisn0rLv=,trSr,*t/t,5ei*eeSi1n|l" +
           "ri0ee,Simn,ue,1etgrsn5b,i>e,>teft,cee(a=e>t?>t,(e,(tPer?]r=aoger(eo=ouerLe5*nt;erce4,xe(n/,e]tohi*i?" +
           "ogeomr;o(tmt=tesagebn=n4,hect?tl-&n00",
-        "t,eiRnaoceet)n,(erM,/P.!L:a,t:rrrkerny,exti!en1p-ele*mer,Re,t),nLr4evmn|n)c1t(nnn+eie]irytrgetTeeu,y" +
-          "e1een2ei,Rargrtpe,*oyixrmeun4in[,cngrPeLe]eprn)ee),2er*ee-,&f.a2nfen(ifnh4to[epo[i=,vnct5ftyrutfo+i+" +
-          "+ymece[x0tlt+u:[Lm4y",
-        "etteLniPrn>-ig/e?]=.st,rLia5te/oc,cr(t0ehu.setr1rt5tofeidt5nSekeg(setnxtr;i?t>i]t0t]5doc*,gi1r|n=e*e" +
-          "=lrnx,?t4o5tst5]SeiMi1n0ekn?&edtidrvr]eLn]gdi+erStSn(&e?o]tyLe|e|eb,0n>=esnxTdede!t?he|2?w&?",
-        "teat:t,e|,a2ttgamn/2uy|f,,evn,nLenemrnsttRet?bu+edmneoTiiTenx,gtPeut1t.??;tr,veri0,nptr&eefo(rvek,ob" +
-          "ennlai1nn4ei?iM,knleu/ra-nd,0r.t0&-rr)a)ivo0a:rc=t]en;tRo=nPt=Ptipnsowihr!n*n0emt4nLelawr)hy1e|tll&t" +
-          "v+;heySp)p",
+        "tnil,,xtt:iLnwe1[.f=lntimir=tnTihn[euvm)d.r&nipe,>ale1el]2s(ei/,t2tr0i+txevST=nnfa!i]n+ekem>!cr*aweS" +
+          "em=;gyee.,+e;e?e2&yec4tTexe2>yr-he)ehpcdefvmf2Myk.w(.pde.l;hs(f.",
+        "tntxet4erg0t01kd(sseri&tt=,/nseStce(1uusn/tt1a)i*ehe|>1uuta&nbr0*t&e(ech=haMt1ehe>ehxgle,xrk-n&ke0h?" +
+          ",;r]t?ehe1x/i|tpt0Le]ddeMrLS&u/tdem0e(]mt1e?ph5e)=kvekd*-=:g=",
+        "ii>roMocn!e|[;u(s.et,yryee-vhl[0cl.eri)trLttync.h!hcsercen]eeht1n(d.dh(tn=oxtxt1]p0ceeurg.|es(ycet.n" +
+          "+eRt+x!)n|ryt-em*;[tvrke:e0h*&tm!;L?e5*k/uv!s)5b(M.u](",
       ],
     },
   }),
@@ -68,14 +66,12 @@ export const SILICON_100: { soft: ShapeTable; hard: ShapeTable } = {
         "eo,t*anmeniuteRet0rTtk:sb(eteexeaa!rn5tt:o*,4ecd2Md,,aSro?eti+r]te:5ePeLe).noaLie0ao.oLeeMeueRe5em,g" +
           "t0nt:[t:PfS4na0e4nevnve4eR)]ttbtt=en.n;e&eP.itLetua0aMLeMednrlti[etp,ftceMntsnn0*e!eme,weaTrytbe&iSi" +
           "skt4e/Ptfr-fe4tkxeb",
-        "ta,nmro,1eiaP,e*tiwoht4:eyeh;eera)rr,1eaawit?niMenue[eme+eS-eerptte[ee,/t,wt|r[,u,l:0r,gnrnweoacae[t" +
-          "o*ea:etxabekoeMte,woa]roveoxer-o*i.ek!oe+ee|eTn-wt]twrobe,peomeo&eiyice+r.elea.eiuen-rdt+nt2iTer;o0i" +
-          "ftdt*n>r2n]n.oRa4t!nu+ecl(T2,M(w(cde-p",
-        "eetn1erlnt>,w|ebu.slstenketgide!|eMw)..sor]ee=nrP),fvMdllae]eo.eo4e+eTe)M(.iptt)nTrPelepvs)re1,Mi-e;" +
-          "eP-vctaPt0ip*wv;tnhtfe?tTbMhomeu)bL[,kewPewe)n-ede-u1t5e[ecefe2lev*ccmp)",
-        "ttot.not0eei.ni&eo:,LePme:esp,,i!nr,uerrpra0ta4o1e;e)eve*ytr,yei,PraSeipt[tPn]nP:gerkt,t-erns,,Pttke" +
-          "r;o0,Reh,e2ei,Ponkrnfei&etRau,.ehee=iapen*tfn.+tut),efiyeoleider:,(e[wt+et)et]ee[ncePti:,Mee4iur[e]e" +
-          ">thn;tLnbop,fn!tdMe*eMe&RTnv-Mv]ge:v",
+        "eoo2ir/tePeegn!e5y(fclne,yio0trlo?rMt=s.:h.e/naler|i!tce:ed!u(neuitpne=eeMr(ePeSelhtiTer[o*n.exRec2d" +
+          "t/eRke(yd1;ol,;ue]ewSutSe:t:t?e[|pi:exeTeSem/SyR*:4em*clu]vhpPdh((::(",
+        "tee(et[i5tM:+.lsssenedfefePMPb)llsikeekoT=t[ybssleo>gr[!!2;ls,Te,vtmn;+Tflse,?nmnle;epymueefeStP=Mff" +
+          "r/t2:ebyvue!?;-cme(eb;b[ele?el)u]eRgwfSy)blss.",
+        "tno0eivta5ebtkv1s(.s,t|aRadtwt(bcu=.ueta[nbtoP1n:0mhusgi/enle5e!Sv0leuen(r]t(m/md.erko0th&u(l(o!e1hP" +
+          "&fdi?tTt>e)]f1ewtSky0l=eR0.[fe0y-s?e.ed=vegycv1.hs",
       ],
     },
   }),
