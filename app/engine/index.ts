@@ -84,12 +84,14 @@ export { warpModel, warpUncertainty } from "./stack/warp-uncertainty.ts";
 export type { Measured } from "./measured.ts";
 export type { FlowInput, StepInput } from "./flow/model.ts";
 export { walkFlow, type StepState, type WalkOptions } from "./flow/walk.ts";
-export { assessFlow, type AssessedStep, type FlowAssessment, type Verdict } from "./flow/assess.ts";
+export { assessFlow, type FlowAssessment } from "./flow/assess.ts";
+export { judgeFlow, type AssessedStep, type JudgedFlow, type Verdict } from "./flow/judge.ts";
 export { answerSentences, supportSpans } from "./flow/answer.ts";
 
 // Handling rules
 export type { Figure, Finding, FindingLimit, Rule, RuleContext } from "./rules/finding.ts";
 export { defaultLimits, LIMIT_DEFINITIONS, type LimitKey, type SiteLimits } from "./rules/limits.ts";
+export { DESCRIBED_RULES } from "./rules/described-rules.ts";
 export { RULES } from "./rules/rules.ts";
 
 // Directional stack and patterned films

@@ -18,7 +18,7 @@ export function waferAnswer(input: AssessmentInput, lot: LotInput, wafer: LotWaf
   try {
     const { flow, limits } = withLot(input, { ...lot, bow: wafer.bow, thickness: wafer.thickness });
     const { steps } = walkFlow(flow, limits);
-    const context = { flow, limits, steps, uncertainty: [] };
+    const context = { flow, limits, steps, uncertainty: [], workings: null };
     const findings = steps.flatMap((state) => warpRule.judge(context, state));
     const worst = tightest(findings.filter(({ figures }) => figures.length > 0));
     const missing = findings.find(({ outcome }) => outcome === "cannot judge");

@@ -1,6 +1,6 @@
 import { EngineInputError } from "#app/engine/errors.ts";
 import { answerSentences } from "#app/engine/flow/answer.ts";
-import { assessFlow, type AssessedStep, type FlowAssessment } from "#app/engine/flow/assess.ts";
+import { judgeFlow, type AssessedStep, type JudgedFlow } from "#app/engine/flow/judge.ts";
 import type { FlowInput } from "#app/engine/flow/model.ts";
 import type { SiteLimits } from "#app/engine/rules/limits.ts";
 import { formatQuantity } from "#app/engine/units/format.ts";
@@ -9,12 +9,12 @@ import { refusalReason } from "./worker-run.ts";
 
 /** An assessment made in the browser: the engine's own, with its sentences; or why there is none. */
 export type Answer =
-  { computed: true; assessment: FlowAssessment; sentences: string[] } | { computed: false; reason: string };
+  { computed: true; assessment: JudgedFlow; sentences: string[] } | { computed: false; reason: string };
 
-/** Assesses a flow as the server would, with the same code. */
+/** Assesses a flow as the server would, with the same code; the derivations, which nothing here shows, are left out. */
 export function answerOf(input: FlowInput, limits: SiteLimits): Answer {
   try {
-    const assessment = assessFlow(input, limits);
+    const assessment = judgeFlow(input, limits);
     return { computed: true, assessment, sentences: answerSentences(input, assessment) };
   } catch (error) {
     if (!(error instanceof EngineInputError)) throw error;
@@ -66,7 +66,7 @@ export interface StepChange {
 const NOTABLE = 0.02;
 
 /** The steps whose outcome, support or shape differ between two assessments of the same steps. */
-export function changedSteps(before: FlowAssessment, after: FlowAssessment): StepChange[] {
+export function changedSteps(before: JudgedFlow, after: JudgedFlow): StepChange[] {
   return before.steps.flatMap((was, index): StepChange[] => {
     const becomes = after.steps[index];
     if (!becomes) return [];

@@ -10,7 +10,8 @@ import type {
 } from "#app/engine/vocabulary.ts";
 import type { ReleaseMethod, StepKind } from "#app/engine/flow/model.ts";
 import type { Finding } from "#app/engine/rules/finding.ts";
-import type { AssumedInput, Verdict } from "#app/engine/flow/assess.ts";
+import type { AssumedInput } from "#app/engine/flow/assess.ts";
+import type { Verdict } from "#app/engine/flow/judge.ts";
 import type { TemperatureProfile } from "#app/engine/flow/temperature-profile.ts";
 import type { Contribution } from "#app/engine/flow/uncertainty.ts";
 import type { Working } from "#app/engine/working.ts";

@@ -1,6 +1,6 @@
 import type { z } from "zod";
 import { estimateSchema, type EstimateFault, type EstimateRequest } from "#app/schemas/estimate.ts";
-import { EstimateRefused } from "./estimate-answer.ts";
+import { EstimateRefused } from "#app/lib/estimate-answer.ts";
 
 /** A request from outside as the schema understands it. @throws EstimateRefused with a pointer for every fault */
 export function readEstimateRequest(body: unknown): EstimateRequest {

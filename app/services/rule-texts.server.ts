@@ -1,5 +1,5 @@
+import { DESCRIBED_RULES } from "#app/engine/rules/described-rules.ts";
 import { LIMIT_DEFINITIONS, type LimitDefinition, type LimitKey } from "#app/engine/rules/limits.ts";
-import { RULES } from "#app/engine/rules/rules.ts";
 import { formatQuantity } from "#app/engine/units/format.ts";
 import { limitQuantity } from "#app/lib/limit-quantity.ts";
 import { mayOnSite } from "#app/policies/permissions.ts";
@@ -10,7 +10,7 @@ import { siteLimits } from "./limits.server.ts";
 /** The handling rules in words; with the site's limits for those who may see the library. */
 export async function ruleTexts(scope: ActorScope): Promise<RuleText[]> {
   const limits = mayOnSite(scope.actor, "see the library") ? await siteLimits(scope) : null;
-  return RULES.map(({ number, title, asks, limits: keys }) => ({
+  return DESCRIBED_RULES.map(({ number, title, asks, limits: keys }) => ({
     number,
     title,
     asks,

@@ -11,14 +11,15 @@ import { laminateModel } from "../../engine/uncertainty/laminate-model.ts";
 import { stepsSampling } from "../../engine/uncertainty/sample-steps.ts";
 import { sampleUncertainty } from "../../engine/uncertainty/sample-uncertainty.ts";
 import { shapeCurve } from "../../engine/uncertainty/shape-curve.ts";
-import { liveBundle } from "./bundle.mjs";
+import { compareWithNumpy } from "./against-numpy.mjs";
+import { bundleSize, FLOW_PAGE, LIVE, STACK_PAGE } from "./bundle.mjs";
 import { inputsOf, stackOf } from "./cases.mjs";
 import { metalFlow } from "./flows.mjs";
-import { compareWithNumpy } from "./against-numpy.mjs";
+import { sweepInBrowser } from "./in-browser.mjs";
 import { scans } from "./scans.mjs";
 import { shortest, slope } from "./timing.mjs";
 
-function sweep() {
+async function sweep() {
   const films = [1, 2, 3, 4, 5, 6].map((n) => ({
     wafer: { diameter: 0.3, orientation: "100", thickness: 775e-6 },
     films: [
@@ -29,7 +30,14 @@ function sweep() {
   const time = shortest(20, () => {
     for (const stack of films) thicknessSweep(stack, { from: 30e-6, to: 775e-6, points: 200 });
   });
-  console.log(`Sweep of 200 thicknesses and 6 stacks, shape included: ${(1e3 * time).toFixed(1)} ms (wanted 16 ms)`);
+  const ms = (seconds) => `${(1e3 * seconds).toFixed(1)} ms`;
+  console.log(`Sweep of 200 thicknesses and 6 stacks, shape included: ${ms(time)} (wanted 16 ms)`);
+  const browser = await sweepInBrowser(films);
+  console.log(
+    browser
+      ? `    in Chromium, by the clock: ${ms(browser.least)}, the very first time ${ms(browser.first)}`
+      : "    not measured in a browser: Chromium is not installed",
+  );
 }
 
 /** A flow of so many steps on stacks of so many layers: the silicon's thickness differs from step to step, the films are the same. */
@@ -109,15 +117,21 @@ function longFlow() {
 }
 
 async function size() {
-  const { gzip, plain, packages } = await liveBundle();
   const kB = (bytes) => `${(bytes / 1e3).toFixed(1)} kB`;
-  console.log(
-    `Live part in the browser (estimate, sweep, assessment, units, limits): ${kB(gzip)} gzip (wanted 60 kB), ${kB(plain)} plain, ${(100 * packages).toFixed(0)} % of it packages`,
-  );
+  for (const [what, parts] of [
+    ["a stack's answer and sweep", STACK_PAGE],
+    ["a flow's assessment", FLOW_PAGE],
+    ["both", LIVE],
+  ]) {
+    const { gzip, plain, packages } = await bundleSize(parts);
+    console.log(
+      `Live part in the browser, ${what}, units and limits included: ${kB(gzip)} gzip (wanted 60 kB), ${kB(plain)} plain, ${packages.length} modules of packages`,
+    );
+  }
 }
 
 compareWithNumpy();
-sweep();
+await sweep();
 flow();
 walks();
 longFlow();

@@ -4,29 +4,36 @@ import { build } from "vite";
 
 const root = fileURLToPath(new URL("../../../", import.meta.url));
 
-/** What a page needs to compute while somebody types, by module of the engine. */
-const LIVE = {
-  "stack/estimate-stack.ts": ["estimateStack"],
-  "stack/thickness-sweep.ts": ["thicknessSweep"],
-  "flow/assess.ts": ["assessFlow"],
-  "rules/limits.ts": ["defaultLimits", "LIMIT_DEFINITIONS"],
+/** What pages need to compute while somebody types, by module of the engine. */
+const UNITS = {
   "units/parse-quantity.ts": ["parseQuantity"],
   "units/format.ts": ["formatQuantity", "formatWithUncertainty"],
 };
-
-const lines = Object.entries(LIVE).map(
-  ([path, names]) => `export { ${names.join(", ")} } from ${JSON.stringify(`${root}app/engine/${path}`)};`,
-);
+const LIMITS = { "rules/limits.ts": ["defaultLimits", "LIMIT_DEFINITIONS"] };
+export const STACK_PAGE = {
+  "stack/estimate-stack.ts": ["estimateStack"],
+  "stack/stack-support.ts": ["stackSupport"],
+  "stack/thickness-sweep.ts": ["curlingThickness", "thicknessSweep"],
+  "stack/warp-uncertainty.ts": ["warpUncertainty"],
+  ...LIMITS,
+  ...UNITS,
+};
+export const FLOW_PAGE = { "flow/judge.ts": ["judgeFlow"], ...LIMITS, ...UNITS };
+/** All of it, for somebody who goes from one page to the other. */
+export const LIVE = { ...STACK_PAGE, ...FLOW_PAGE };
 
 const ENTRY = "virtual:live";
 
 /**
- * Size of the engine's live part as the browser gets it, bundled by the program that bundles the client, and how much of it are
- * packages.
+ * Modules of the engine as the browser gets them, bundled by the program that bundles the client.
  *
- * @returns {Promise<{ gzip: number, plain: number, packages: number }>} bytes; `packages` a share before minifying, 0 to 1
+ * @param {Record<string, string[]>} parts names to export, by module of the engine
+ * @param {"es" | "iife"} format `iife` puts what is exported into the global `live`
  */
-export async function liveBundle() {
+export async function bundled(parts, format = "es") {
+  const lines = Object.entries(parts).map(
+    ([path, names]) => `export { ${names.join(", ")} } from ${JSON.stringify(`${root}app/engine/${path}`)};`,
+  );
   const built = await build({
     root,
     configFile: false,
@@ -41,13 +48,24 @@ export async function liveBundle() {
     build: {
       write: false,
       target: "es2022",
-      rollupOptions: { input: ENTRY, preserveEntrySignatures: "strict", output: { format: "es" } },
+      rollupOptions: { input: ENTRY, preserveEntrySignatures: "strict", output: { format, name: "live" } },
     },
   });
   const chunks = [built].flat().flatMap(({ output }) => output.filter(({ type }) => type === "chunk"));
-  const code = chunks.map((chunk) => chunk.code).join("");
-  const modules = chunks.flatMap((chunk) => Object.entries(chunk.modules));
-  const length = (list) => list.reduce((sum, [, { renderedLength }]) => sum + renderedLength, 0);
-  const packages = length(modules.filter(([id]) => id.includes("node_modules"))) / length(modules);
+  return {
+    code: chunks.map(({ code }) => code).join(""),
+    modules: chunks.flatMap((chunk) => Object.keys(chunk.modules)),
+  };
+}
+
+/**
+ * Size of a part of the engine in the browser.
+ *
+ * @param {Record<string, string[]>} parts as for `bundled`
+ * @returns {Promise<{ gzip: number, plain: number, packages: string[] }>} bytes; `packages` are modules from outside the project
+ */
+export async function bundleSize(parts) {
+  const { code, modules } = await bundled(parts);
+  const packages = modules.filter((id) => id.includes("node_modules"));
   return { gzip: gzipSync(code, { level: 9 }).length, plain: code.length, packages };
 }

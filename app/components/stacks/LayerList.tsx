@@ -1,4 +1,5 @@
 import type { FieldMetadata, FormMetadata } from "@conform-to/react";
+import { memo } from "react";
 import { useInBrowser } from "#app/components/ui/use-in-browser.ts";
 import type { Side } from "#app/engine/vocabulary.ts";
 import type { DraftLayer, FilmChoice, StackDraft } from "#app/lib/stack-draft.ts";
@@ -40,6 +41,7 @@ export function LayerList({ form, field, draft, films, selected, onSelect }: Pro
           field={layer}
           place={{ index, count: list.length, first: index === among[0], last: index === among.at(-1) }}
           draft={draft.layers[index]}
+          stamp={JSON.stringify([layer.key, layer.value, layer.allErrors, draft.layers[index]])}
           incomplete={draft.faults.some(({ field: name }) => name.startsWith(`layers[${index}].`))}
           films={films}
           selected={selected === index}
@@ -91,6 +93,8 @@ interface PartProps {
   field: FieldMetadata<LayerText>;
   place: { index: number; count: number; first: boolean; last: boolean };
   draft: DraftLayer | undefined;
+  /** the same while nothing of the film has changed, its errors included */
+  stamp: string;
   /** whether something is missing or cannot be read */
   incomplete: boolean;
   films: readonly FilmChoice[];
@@ -98,7 +102,21 @@ interface PartProps {
   onSelect: (index: number) => void;
 }
 
-function LayerPart({ form, field, place, draft, incomplete, films, selected, onSelect }: PartProps) {
+/** A key typed into one film leaves the fields of all others as they are: twenty films are hundreds of fields. */
+const LayerPart = memo(
+  LayerFold,
+  (before, after) =>
+    before.stamp === after.stamp &&
+    before.films === after.films &&
+    before.selected === after.selected &&
+    before.incomplete === after.incomplete &&
+    before.place.index === after.place.index &&
+    before.place.count === after.place.count &&
+    before.place.first === after.place.first &&
+    before.place.last === after.place.last,
+);
+
+function LayerFold({ form, field, place, draft, incomplete, films, selected, onSelect }: PartProps) {
   const inBrowser = useInBrowser();
   const { index, count, first, last } = place;
   const name = draft?.name ?? `film ${index + 1}`;

@@ -1,4 +1,4 @@
-import type { ReactNode } from "react";
+import { memo, type ReactNode } from "react";
 import { WarpChart } from "#app/components/charts/WarpChart.tsx";
 import type { SiteLimits } from "#app/engine/rules/limits.ts";
 import { warpChart, type ChartOthers } from "#app/lib/stack-chart.ts";
@@ -16,21 +16,45 @@ interface Props {
 }
 
 /** Warp against silicon thickness, with whatever is laid over it and what differs in words. */
-export function StackChart({ name, panel: { room, hot }, overlay, limits, options }: Props) {
-  const data = warpChart(room, { hot, overlay }, limits);
-  const csv = stackCsv(name, room, { hot, overlay });
-  const at = thicknessWords(room.request.wafer.thickness_m);
+export function StackChart({ name, panel, overlay, limits, options }: Props) {
   return (
     <section className="border-t border-line px-4 py-4 tablet:px-6" aria-labelledby="chart">
       <div className="mb-2 flex flex-wrap items-baseline justify-between gap-x-4">
         <h3 id="chart" className="font-semibold">
           Warp against silicon thickness, free wafer
         </h3>
-        <a href={dataAddress(csv)} download={`${fileName(name)}-warp.csv`} className="link text-label">
-          Figures as CSV
-        </a>
+        <CsvLink name={name} panel={panel} overlay={overlay} />
       </div>
       {options}
+      <WarpCurves panel={panel} overlay={overlay} limits={limits} />
+    </section>
+  );
+}
+
+/** The figures of the chart as a file. */
+const CsvLink = memo(function CsvLink({
+  name,
+  panel: { room, hot },
+  overlay,
+}: Pick<Props, "name" | "panel" | "overlay">) {
+  return (
+    <a
+      href={dataAddress(stackCsv(name, room, { hot, overlay }))}
+      download={`${fileName(name)}-warp.csv`}
+      className="link text-label"
+    >
+      Figures as CSV
+    </a>
+  );
+});
+
+/** Drawn anew only for other figures: a chart takes longer than a key. */
+const WarpCurves = memo(function WarpCurves({ panel, overlay, limits }: Pick<Props, "panel" | "overlay" | "limits">) {
+  const { room, hot } = panel;
+  const data = warpChart(room, { hot, overlay }, limits);
+  const at = thicknessWords(room.request.wafer.thickness_m);
+  return (
+    <>
       {data ? (
         <WarpChart
           data={data}
@@ -51,9 +75,9 @@ export function StackChart({ name, panel: { room, hot }, overlay, limits, option
           ))}
         </p>
       )}
-    </section>
+    </>
   );
-}
+});
 
 /** The file itself as an address, so that it is there without scripts and always of the figures on the screen. */
 const dataAddress = (csv: string) => `data:text/csv;charset=utf-8,${encodeURIComponent(csv)}`;

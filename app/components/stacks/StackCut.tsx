@@ -1,3 +1,4 @@
+import { memo } from "react";
 import { Cut } from "#app/components/drawings/Cut.tsx";
 import type { StackPanel } from "#app/lib/stack-panel.ts";
 import type { StackDraft } from "#app/lib/stack-draft.ts";
@@ -19,8 +20,20 @@ interface Props {
   };
 }
 
-/** The stack layer by layer as it is typed, with the shape that its free wafer takes. */
-export function StackCut({ draft, panel, limits, edit }: Props) {
+/**
+ * The stack layer by layer as it is typed, with the shape that its free wafer takes. Drawn anew only when one of these changes; what
+ * `edit` does depends on nothing else.
+ */
+export const StackCut = memo(
+  CutDrawing,
+  (before, after) =>
+    before.draft === after.draft &&
+    before.panel === after.panel &&
+    before.limits === after.limits &&
+    before.edit?.selected === after.edit?.selected,
+);
+
+function CutDrawing({ draft, panel, limits, edit }: Props) {
   const layers = stackCutLayers(draft, edit?.selected ?? null);
   const partAt = (index: number) => layers[index]?.part ?? "silicon";
   return (

@@ -1,11 +1,11 @@
 import { getFormProps, type SubmissionResult } from "@conform-to/react";
-import { useCallback, useState } from "react";
+import { useCallback, useDeferredValue, useState } from "react";
 import { Form } from "react-router";
 import { FormHead } from "#app/components/forms/FormHead.tsx";
 import { NoteField } from "#app/components/forms/NoteField.tsx";
 import { useRecordForm } from "#app/components/forms/use-record-form.ts";
 import type { StackAround } from "#app/lib/stack-around.ts";
-import { stackDraft, type DraftFault } from "#app/lib/stack-draft.ts";
+import type { DraftFault } from "#app/lib/stack-draft.ts";
 import { panelRequests, type StackPanel } from "#app/lib/stack-panel.ts";
 import { saysTheSame, stackText, type StackText } from "#app/lib/stack-text.ts";
 import { viewTemperature } from "#app/lib/stack-view.ts";
@@ -20,6 +20,7 @@ import { StackHeadFields } from "./StackHeadFields.tsx";
 import { StackPanes } from "./StackPanes.tsx";
 import { UnsavedGuard } from "#app/components/forms/UnsavedGuard.tsx";
 import { useLiveEstimate } from "./use-live-estimate.ts";
+import { useStackDraft } from "./use-stack-draft.ts";
 import { useSelectedLayer } from "./use-selected-layer.ts";
 import { ViewOptions } from "./ViewOptions.tsx";
 
@@ -41,10 +42,12 @@ export function StackEditor(props: Props) {
   const { text, version, programs, lastResult, choices, limits, view, overlay, others } = props;
   const [form, fields] = useRecordForm<StackText>({ id: STACK_FORM, lastResult, defaultValue: text });
   const typed = stackText(form.value);
-  const draft = stackDraft(typed, choices);
+  const draft = useStackDraft(JSON.stringify(typed), choices);
   const [at, setAt] = useState(view.at);
   const { temperature, read } = viewTemperature(at);
-  const live = useLiveEstimate(panelRequests(draft, temperature), props.panel);
+  const live = useLiveEstimate(panelRequests(draft, temperature), props.panel, limits);
+  // The field comes first, then the drawings, which take longer and can wait for the next key.
+  const [drawn, panel] = [useDeferredValue(draft), useDeferredValue(live.panel)];
   const focusPart = useCallback((part: CutPartOf) => {
     focusField(part === "silicon" ? "siliconThickness.value" : `layers[${part}].film`);
   }, []);
@@ -73,8 +76,8 @@ export function StackEditor(props: Props) {
               <div className="grid grid-cols-[minmax(0,1fr)] @min-[700px]:grid-cols-[464px_minmax(0,1fr)]">
                 <div className="p-4 tablet:px-0">
                   <StackCut
-                    draft={draft}
-                    panel={live.panel}
+                    draft={drawn}
+                    panel={panel}
                     limits={limits}
                     edit={{
                       selected: part,
@@ -116,8 +119,8 @@ export function StackEditor(props: Props) {
         findings={
           <StackFindings
             name={typed.name || "New stack"}
-            draft={draft}
-            panel={live.panel}
+            draft={drawn}
+            panel={panel}
             overlay={overlay}
             limits={limits}
             options={

@@ -1,4 +1,4 @@
-import type { ReactNode } from "react";
+import { useMemo, type ReactNode } from "react";
 import type { SiteLimits } from "#app/engine/rules/limits.ts";
 import type { ChartOthers } from "#app/lib/stack-chart.ts";
 import type { StackDraft } from "#app/lib/stack-draft.ts";
@@ -21,6 +21,7 @@ interface Props {
 
 /** What follows from the stack besides the answer: the curve, the models side by side, what is assumed, the calculations. */
 export function StackFindings({ name, draft, panel, overlay, limits, options }: Props) {
+  const names = useMemo(() => turnFront(draft.layers).map((layer) => layer.name), [draft]);
   if (!panel) return <div className="border-t border-line px-4 py-4 tablet:px-6">{options}</div>;
   return (
     <>
@@ -28,7 +29,7 @@ export function StackFindings({ name, draft, panel, overlay, limits, options }: 
       <BowModels estimated={panel.room} />
       <WarpSpread estimated={panel.room} />
       <AssumedInputs draft={draft} />
-      <StackWorkings working={panel.room.answer.working} names={turnFront(draft.layers).map((layer) => layer.name)} />
+      <StackWorkings estimated={panel.room} names={names} />
     </>
   );
 }

@@ -1,39 +1,52 @@
+import { memo, useState, type ReactNode } from "react";
 import { WorkingView } from "#app/components/working/WorkingView.tsx";
-import type { EstimateAnswer } from "#app/schemas/estimate.ts";
+import type { Estimated } from "#app/lib/stack-words.ts";
+import { useWorkings, type Workings } from "./use-workings.ts";
 
-/** The calculations behind the figures, folded away until asked for. */
-export function StackWorkings({ working, names }: { working: EstimateAnswer["working"]; names: readonly string[] }) {
-  if (!working) return null;
+interface Props {
+  estimated: Estimated;
+  /** of the films, in the order of the request */
+  names: readonly string[];
+}
+
+/** The calculations behind the figures, folded away until asked for: what was typed since is worked out only then. */
+export const StackWorkings = memo(function StackWorkings({ estimated, names }: Props) {
+  const [asked, setAsked] = useState(false);
+  const { workings, failed } = useWorkings(estimated, asked);
+  const fold = (words: string, of: (workings: Workings) => ReactNode) => (
+    <details className="mt-1" onToggle={(event) => event.currentTarget.open && setAsked(true)}>
+      <summary className="link w-fit cursor-pointer">{words}</summary>
+      <div className="mt-2 mb-4">
+        {workings ? (
+          of(workings)
+        ) : (
+          <p className={failed ? "text-stop" : "text-quiet"} role="status">
+            {failed ? "The workings did not load. Save the stack to see them." : "Working it out"}
+          </p>
+        )}
+      </div>
+    </details>
+  );
   return (
     <section className="border-t border-line px-4 py-3 tablet:px-6" aria-labelledby="workings">
       <h3 id="workings" className="font-semibold">
         Workings
       </h3>
-      <Folded words="Bow of the free wafer">
-        <WorkingView working={working.shape} level={4} />
-      </Folded>
-      <Folded words="Bow by Stoney’s formula">
-        <WorkingView working={working.stoney} level={4} />
-      </Folded>
-      {working.film_forces.length > 0 && (
-        <Folded words="Film forces">
-          {working.film_forces.map((force, index) => (
+      {fold("Bow of the free wafer", ({ shape }) => (
+        <WorkingView working={shape} level={4} />
+      ))}
+      {fold("Bow by Stoney’s formula", ({ stoney }) => (
+        <WorkingView working={stoney} level={4} />
+      ))}
+      {estimated.request.films.length > 0 &&
+        fold("Film forces", ({ film_forces }) =>
+          film_forces.map((force, index) => (
             <div key={index} className="mt-3 first:mt-0">
               <p className="text-quiet">{names[index]}</p>
               <WorkingView working={force} level={4} />
             </div>
-          ))}
-        </Folded>
-      )}
+          )),
+        )}
     </section>
   );
-}
-
-function Folded({ words, children }: { words: string; children: React.ReactNode }) {
-  return (
-    <details className="mt-1">
-      <summary className="link w-fit cursor-pointer">{words}</summary>
-      <div className="mt-2 mb-4">{children}</div>
-    </details>
-  );
-}
+});

@@ -1,4 +1,4 @@
-import type { AssessedStep, FlowAssessment } from "./assess.ts";
+import type { AssessedStep, JudgedFlow } from "./judge.ts";
 import type { FlowInput } from "./model.ts";
 import { inSentence } from "../in-sentence.ts";
 import { supportRank, type SupportClass } from "../vocabulary.ts";
@@ -23,7 +23,7 @@ export function supportSpans(steps: AssessedStep[]): SupportSpan[] {
 }
 
 /** The step that comes nearest to, or farthest beyond, its tool's warp limit. */
-export function tightestStep({ findings }: Pick<FlowAssessment, "findings">) {
+export function tightestStep({ findings }: Pick<JudgedFlow, "findings">) {
   const warps = findings.filter(({ rule, limit, figures }) => rule === 2 && limit && figures[0]);
   const use = (finding: (typeof warps)[number]) =>
     (finding.figures[0]?.value ?? 0) / (finding.limit?.value ?? Infinity);
@@ -37,7 +37,7 @@ export function tightestStep({ findings }: Pick<FlowAssessment, "findings">) {
  * The answer in plain words: one sentence on support, one on what decides. The first is what a technician needs, the second
  * what an engineer asks next.
  */
-export function answerSentences(flow: FlowInput, assessment: FlowAssessment): string[] {
+export function answerSentences(flow: FlowInput, assessment: JudgedFlow): string[] {
   const { verdict, findings } = assessment;
   const blocking = findings.find(
     ({ outcome, step, rule }) => outcome === verdict.outcome && step === verdict.step && rule === verdict.rule,
@@ -53,7 +53,7 @@ export function answerSentences(flow: FlowInput, assessment: FlowAssessment): st
     : [support];
 }
 
-function supportSentence(flow: FlowInput, { steps, verdict }: FlowAssessment): string {
+function supportSentence(flow: FlowInput, { steps, verdict }: JudgedFlow): string {
   const spans = supportSpans(steps).filter(({ support }) => support !== "bare");
   const planned = verdict.outcome === "clear" || verdict.outcome === "caution";
   const opening =
@@ -72,7 +72,7 @@ function supportSentence(flow: FlowInput, { steps, verdict }: FlowAssessment): s
 const finish = (opening: string, rest: string) => `${opening}${rest}.`;
 
 /** Which steps have to be signed. */
-function cautionSentence({ findings }: FlowAssessment): string | null {
+function cautionSentence({ findings }: JudgedFlow): string | null {
   const steps = [...new Set(findings.filter(({ outcome }) => outcome === "caution").map(({ step }) => step))];
   if (steps.length === 0) return null;
   const last = steps.at(-1);
@@ -81,7 +81,7 @@ function cautionSentence({ findings }: FlowAssessment): string | null {
     : `Cautions at steps ${steps.slice(0, -1).join(", ")} and ${last}.`;
 }
 
-function tightestSentence(assessment: FlowAssessment): string | null {
+function tightestSentence(assessment: JudgedFlow): string | null {
   const tightest = tightestStep(assessment);
   if (!tightest) return null;
   return `Tightest: step ${tightest.step}, ${inSentence(tightest.reason)}`;

@@ -1,98 +1,30 @@
-import type { Finding, RuleContext } from "../rules/finding.ts";
+import { FINDING_WORKINGS } from "../rules/finding-workings.ts";
 import type { SiteLimits } from "../rules/limits.ts";
-import { requiredAt } from "../rules/rule-01-thickness.ts";
-import { RULES } from "../rules/rules.ts";
-import { outcomeRank, supportRank, type Outcome, type SupportClass } from "../vocabulary.ts";
+import { judgeFlow, type JudgedFlow } from "./judge.ts";
 import type { FlowInput } from "./model.ts";
 import { statedInputs } from "./stated-inputs.ts";
-import { flowUncertainty, type Contribution } from "./uncertainty.ts";
-import { walkFlow, type StepState } from "./walk.ts";
-
-/** A step with what the walk and the rules say of it. */
-export interface AssessedStep {
-  state: StepState;
-  /** null when the thickness rule does not know the wafer size */
-  required: SupportClass | null;
-  outcome: Outcome;
-  uncertainty: { atRoom: number | null; atPeak: number | null };
-  budget: Contribution[];
-}
-
-/** The worst finding and the first step that causes it. */
-export interface Verdict {
-  outcome: Outcome;
-  step: number | null;
-  rule: number | null;
-}
 
 export interface AssumedInput {
   step: number;
   what: string;
 }
 
-export interface FlowAssessment {
-  steps: AssessedStep[];
-  findings: Finding[];
-  verdict: Verdict;
+export interface FlowAssessment extends JudgedFlow {
   /** inputs that nobody measured or looked up */
   assumed: AssumedInput[];
   /** how many inputs there are, assumed ones included */
   inputs: number;
 }
 
-/** The worst of some findings; clear when there are none. */
-export function worstOutcome(findings: Finding[]): Outcome {
-  return findings.reduce<Outcome>(
-    (worst, { outcome }) => (outcomeRank(outcome) > outcomeRank(worst) ? outcome : worst),
-    "clear",
-  );
-}
-
-/** Support that a step needs: by the thickness rule, raised by a sag, among its findings, that no free wafer may have. */
-function supportNeeded(context: RuleContext, state: StepState, findings: Finding[]): SupportClass | null {
-  const required = requiredAt(context, state)?.support ?? null;
-  const sags = findings.some(({ rule, outcome }) => rule === 5 && outcome === "needs support");
-  if (!sags || required === null) return required;
-  return supportRank(required) < supportRank("tape or ring") ? "tape or ring" : required;
-}
-
-function byStep(findings: Finding[]): Map<number, Finding[]> {
-  const groups = new Map<number, Finding[]>();
-  for (const finding of findings) {
-    const group = groups.get(finding.step);
-    if (group) group.push(finding);
-    else groups.set(finding.step, [finding]);
-  }
-  return groups;
-}
-
 /**
- * Walks a flow, judges every rule at every step and gives the verdict.
+ * Walks a flow, judges every rule at every step and gives the verdict, each figure with its working.
  * @throws EngineInputError when an input cannot be computed with; nothing that could not be computed counts as passed
  */
 export function assessFlow(flow: FlowInput, limits: SiteLimits): FlowAssessment {
-  const { steps } = walkFlow(flow, limits);
-  const uncertainty = flowUncertainty(flow, limits);
-  const context: RuleContext = { flow, limits, steps, uncertainty };
-  const findings = steps.flatMap((state) => RULES.flatMap((rule) => rule.judge(context, state)));
-  const outcome = worstOutcome(findings);
-  const first = findings.find((finding) => finding.outcome === outcome);
+  const judged = judgeFlow(flow, limits, FINDING_WORKINGS);
   const inputs = statedInputs(flow);
-  const ofStep = byStep(findings);
   return {
-    steps: steps.map((state, index) => ({
-      state,
-      required: supportNeeded(context, state, ofStep.get(state.number) ?? []),
-      outcome: worstOutcome(ofStep.get(state.number) ?? []),
-      uncertainty: { atRoom: uncertainty[index]?.atRoom ?? null, atPeak: uncertainty[index]?.atPeak ?? null },
-      budget: uncertainty[index]?.budget ?? [],
-    })),
-    findings,
-    verdict: {
-      outcome,
-      step: outcome === "clear" ? null : (first?.step ?? null),
-      rule: outcome === "clear" ? null : (first?.rule ?? null),
-    },
+    ...judged,
     assumed: inputs.flatMap(({ step, what, source }) => (source === "assumed" ? [{ step, what }] : [])),
     inputs: inputs.length,
   };

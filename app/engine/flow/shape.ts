@@ -1,6 +1,6 @@
 import type { Layer } from "../laminate/layer.ts";
 import type { LaminateBalance } from "../laminate/solve-laminate.ts";
-import { freeWaferShape, type FreeWaferShapeInput } from "../plate/free-wafer-shape.ts";
+import { reachedWaferShape, type FreeWaferShapeInput } from "../plate/free-wafer-shape.ts";
 import { nearestAxes } from "../silicon/nearest-axes.ts";
 import type { FaceUp, ShapeRegime, ShapeWord } from "../vocabulary.ts";
 import { waferConstants } from "./silicon.ts";
@@ -57,7 +57,7 @@ export function lyingShape(
     crystal: bonded || wafer.orientation !== "100" ? undefined : "100",
     ...(unequal && { axes: nearestAxes(unequal.principal.angle) }),
   };
-  const shape = freeWaferShape(disc);
+  const shape = reachedWaferShape(disc);
   return {
     temperature,
     linearCurvature: unequal?.principal.major ?? solution.curvature,

@@ -1,9 +1,9 @@
 import { EngineInputError } from "../errors.ts";
 import { requireModulus, requireRadius, requireThickness, requireWithin } from "../inputs.ts";
 import { bendingStiffness } from "./bending-stiffness.ts";
-import { largeSag } from "./linear-limit.ts";
-import { linearSag } from "./linear-sag.ts";
-import { checkSupport, type Support } from "./support.ts";
+import { carriedLargeSag, largeSag, type LargeSag } from "./linear-limit.ts";
+import { carriedLinearSag, linearSag, type LinearSag } from "./linear-sag.ts";
+import { checkCarrying, checkSupport, type CarryingSupport, type RelativeSupport, type Support } from "./support.ts";
 
 /** Standard acceleration of free fall, m/s², exact by definition (3rd General Conference on Weights and Measures, 1901). */
 export const STANDARD_GRAVITY = 9.80665;
@@ -59,12 +59,25 @@ export interface GravitySag {
  * computation for rails and large deflections.
  */
 export function gravitySag(i: GravitySagInput): GravitySag {
+  return sagOf(i, checkSupport(i.support, requireRadius("radius", i.radius)), linearSag, largeSag);
+}
+
+/** The same on what tools carry wafers by: points and rails. For the rules, which know no other support. */
+export function carriedSag(i: GravitySagInput & { support: CarryingSupport }): GravitySag {
+  return sagOf(i, checkCarrying(i.support, requireRadius("radius", i.radius)), carriedLinearSag, carriedLargeSag);
+}
+
+function sagOf<Relative extends RelativeSupport>(
+  i: GravitySagInput,
+  support: Relative,
+  linearOn: (support: Relative, nu: number) => LinearSag,
+  largeOn: (support: Relative, q: number, nu: number, sag: number) => LargeSag,
+): GravitySag {
   const { radius, thickness, stiffness, poissonsRatio, weight } = checkWafer(i);
-  const support = checkSupport(i.support, radius);
   const unit = (weight * radius ** 4) / stiffness;
-  const linear = linearSag(support, poissonsRatio);
+  const linear = linearOn(support, poissonsRatio);
   const load = unit / thickness;
-  const large = largeSag(support, load, poissonsRatio, linear.peakToValley * load);
+  const large = largeOn(support, load, poissonsRatio, linear.peakToValley * load);
   return {
     centre: unit * linear.centre,
     rimHigh: unit * linear.rimHigh,

@@ -1,20 +1,15 @@
+import type { SmoothTable } from "./smooth-table.ts";
 import { RATIO_GRID, type Grid } from "./table-grid.ts";
 
 /**
  * Value at (x, ν) of a table of rows on `grid` and columns on the grid of Poisson's ratios, by cubics through four neighbours in
- * both directions. Beyond the ends the last cubic goes on. `scale` is applied to the entries before.
+ * both directions. Beyond the ends the last cubic goes on.
  */
-export function tableValue(
-  table: readonly (readonly number[])[],
-  grid: Grid,
-  x: number,
-  nu: number,
-  scale: (value: number) => number = (value) => value,
-): number {
+export function tableValue(table: SmoothTable, grid: Grid, x: number, nu: number): number {
   const across = neighbours(RATIO_GRID, nu);
   let total = 0;
   for (const [row, share] of neighbours(grid, x)) {
-    for (const [column, part] of across) total += share * part * scale(table[row]?.[column] ?? 0);
+    for (const [column, part] of across) total += share * part * (table[row]?.[column] ?? 0);
   }
   return total;
 }

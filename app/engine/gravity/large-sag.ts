@@ -1,6 +1,6 @@
 import { tableValue } from "./interpolate.ts";
 import { POINT_GRID, RING_GRID } from "./table-grid.ts";
-import { POINT_RATIOS, RING_RATIOS } from "./table/large-sag.ts";
+import { POINT_RATIOS, RING_LOGARITHMS } from "./table/large-sag.ts";
 
 /**
  * Sag on a ring under the rim over that of small deflections, by von Karman's theory of full symmetry, rim free to slide and
@@ -14,7 +14,7 @@ export function edgeRingRatio(q: number, nu: number): number {
   if (q < 0.1) return 1;
   const power = Math.log10(q);
   const last = RING_GRID.first + RING_GRID.step * (RING_GRID.count - 1);
-  const ratio = Math.exp(tableValue(RING_RATIOS, RING_GRID, Math.min(power, last), nu, Math.log));
+  const ratio = Math.exp(tableValue(RING_LOGARITHMS, RING_GRID, Math.min(power, last), nu));
   return power > last ? ratio * 10 ** ((-2 / 3) * (power - last)) : ratio;
 }
 

@@ -1,5 +1,5 @@
 import { edgeRingRatio, threePointRatio } from "./large-sag.ts";
-import type { RelativeSupport } from "./support.ts";
+import type { RelativeCarrying, RelativeSupport } from "./support.ts";
 
 /** Small deflections count as right while the sag is within this share of that of large ones. */
 const WITHIN = 0.05;
@@ -36,15 +36,25 @@ export interface LargeSag {
  * Elsewhere the linear sag is an upper bound and no more is said.
  */
 export function largeSag(support: RelativeSupport, q: number, nu: number, sag: number): LargeSag {
+  if (support.kind === "points" || support.kind === "rails") return carriedLargeSag(support, q, nu, sag);
   if (support.kind === "ring" && support.at === 1) return known(edgeRingRatio(q, nu), sag);
+  return upTo(LIMITS[support.kind], sag, null);
+}
+
+/** The same on points or rails. */
+export function carriedLargeSag(support: RelativeCarrying, q: number, nu: number, sag: number): LargeSag {
   const threePoints = support.kind === "points" && support.count === 3;
   if (threePoints && support.at >= AT_RIM) {
     const ratio = threePointRatio(q, nu);
     return ratio === null ? { linearValid: false, range: band(sag) } : known(ratio, sag);
   }
-  const linearValid = sag <= limitOf(support);
-  if (linearValid) return { linearValid, range: { low: (1 - WITHIN) * sag, high: sag } };
-  return { linearValid, range: threePoints || support.kind === "rails" ? band(sag) : null };
+  return upTo(limitOf(support), sag, threePoints || support.kind === "rails" ? band(sag) : null);
+}
+
+/** Small deflections up to a limit, `beyond` from there. */
+function upTo(limit: number, sag: number, beyond: LargeSag["range"]): LargeSag {
+  const linearValid = sag <= limit;
+  return { linearValid, range: linearValid ? { low: (1 - WITHIN) * sag, high: sag } : beyond };
 }
 
 function known(ratio: number, sag: number): LargeSag {
@@ -59,8 +69,8 @@ function band(sag: number): { low: number; high: number } {
   return { low: 0.6 * sag, high: sag };
 }
 
-function limitOf(support: RelativeSupport): number {
-  if (support.kind !== "points") return LIMITS[support.kind];
+function limitOf(support: RelativeCarrying): number {
+  if (support.kind === "rails") return LIMITS.rails;
   if (support.count > 3) return LIMITS.morePoints;
   return support.at >= 0.9 ? LIMITS.threePointsOutside : LIMITS.threePointsInside;
 }

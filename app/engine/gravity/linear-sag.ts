@@ -2,7 +2,7 @@ import { centreCupProfile, centrePointProfile, ringProfile, type Profile } from 
 import { extremes } from "./extremes.ts";
 import { pointSag } from "./point-sag.ts";
 import { railsSag } from "./rails-sag.ts";
-import type { RelativeSupport } from "./support.ts";
+import type { RelativeCarrying, RelativeSupport } from "./support.ts";
 
 /** Heights of a plate of radius 1 in units of q a⁴/D, up positive, zero at the supports. */
 export interface LinearSag {
@@ -23,11 +23,16 @@ export function linearSag(support: RelativeSupport, nu: number): LinearSag {
       return ofProfile(centrePointProfile(nu));
     case "centre-cup":
       return ofProfile(centreCupProfile(support.at, nu));
-    case "points":
-      return onPoints(support.count, support.at, nu);
-    case "rails":
-      return { ...railsSag(support.at, nu), rms: null };
+    default:
+      return carriedLinearSag(support, nu);
   }
+}
+
+/** The same on points or rails. */
+export function carriedLinearSag(support: RelativeCarrying, nu: number): LinearSag {
+  return support.kind === "points"
+    ? onPoints(support.count, support.at, nu)
+    : { ...railsSag(support.at, nu), rms: null };
 }
 
 function ofProfile(profile: Profile): LinearSag {

@@ -1,4 +1,5 @@
 import { tableValue } from "./interpolate.ts";
+import type { SmoothTable } from "./smooth-table.ts";
 import { RAIL_GRID } from "./table-grid.ts";
 import { RAILS_CENTRE, RAILS_HIGH, RAILS_RIM_ACROSS, RAILS_RIM_ALONG, RAILS_RIM_HIGH } from "./table/rails.ts";
 
@@ -12,7 +13,7 @@ import { RAILS_CENTRE, RAILS_HIGH, RAILS_RIM_ACROSS, RAILS_RIM_ALONG, RAILS_RIM_
  * it were pinned along them. Source: own computation ('plate-gravity').
  */
 export function railsSag(at: number, nu: number) {
-  const value = (table: readonly (readonly number[])[]) => tableValue(table, RAIL_GRID, Math.acos(at), nu);
+  const value = (table: SmoothTable) => tableValue(table, RAIL_GRID, Math.acos(at), nu);
   const centre = value(RAILS_CENTRE);
   const [across, along] = [value(RAILS_RIM_ACROSS), value(RAILS_RIM_ALONG)];
   const rimHigh = Math.max(value(RAILS_RIM_HIGH), across, along);

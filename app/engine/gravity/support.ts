@@ -19,13 +19,14 @@ export type Support =
   | { kind: "centre-cup"; radius: number }
   | { kind: "rails"; halfSpacing: number };
 
+/** What boats, stores and grippers carry a wafer by. */
+export type CarryingSupport = Extract<Support, { kind: "points" | "rails" }>;
+
 /** A support with its length as a share of the wafer's radius. */
 export type RelativeSupport =
-  | { kind: "ring"; at: number }
-  | { kind: "points"; count: number; at: number }
-  | { kind: "centre-point" }
-  | { kind: "centre-cup"; at: number }
-  | { kind: "rails"; at: number };
+  { kind: "ring"; at: number } | { kind: "centre-point" } | { kind: "centre-cup"; at: number } | RelativeCarrying;
+
+export type RelativeCarrying = { kind: "points"; count: number; at: number } | { kind: "rails"; at: number };
 
 /** Range of rails over the wafer's radius: nearer the centre the wafer tips, nearer the rim it slips off. */
 export const RAILS_RANGE = { low: 0.05, high: 0.99 } as const;
@@ -34,27 +35,18 @@ const MOST_POINTS = 100;
 
 /** Checks a support under a wafer of `radius` (m) and makes its length relative. Throws `EngineInputError`. */
 export function checkSupport(support: Support, radius: number): RelativeSupport {
-  const share = (field: string, length: number, low: number, high: number) =>
-    requireWithin(`support.${field}`, length, low * radius, high * radius, "m") / radius;
   switch (support.kind) {
     case "edge-ring":
       return { kind: "ring", at: 1 };
     case "ring":
-      return { kind: "ring", at: share("radius", support.radius, 0.01, 1) };
-    case "points": {
-      const count = requireWithin("support.count", support.count, 3, MOST_POINTS, "1");
-      if (!Number.isInteger(count)) throw new EngineInputError("support.count", "must be a whole number");
-      return { kind: "points", count, at: share("radius", support.radius, 0.05, 1) };
-    }
+      return { kind: "ring", at: share("radius", support.radius, radius, 0.01, 1) };
     case "centre-point":
       return support;
     case "centre-cup":
-      return { kind: "centre-cup", at: share("radius", support.radius, 0.01, 0.99) };
+      return { kind: "centre-cup", at: share("radius", support.radius, radius, 0.01, 0.99) };
+    case "points":
     case "rails":
-      return {
-        kind: "rails",
-        at: share("halfSpacing", support.halfSpacing, RAILS_RANGE.low, RAILS_RANGE.high),
-      };
+      return checkCarrying(support, radius);
     default:
       throw new EngineInputError(
         "support.kind",
@@ -62,4 +54,20 @@ export function checkSupport(support: Support, radius: number): RelativeSupport 
         "edge-ring, ring, points, centre-point, centre-cup or rails",
       );
   }
+}
+
+/** The same for points and rails. */
+export function checkCarrying(support: CarryingSupport, radius: number): RelativeCarrying {
+  if (support.kind === "rails")
+    return {
+      kind: "rails",
+      at: share("halfSpacing", support.halfSpacing, radius, RAILS_RANGE.low, RAILS_RANGE.high),
+    };
+  const count = requireWithin("support.count", support.count, 3, MOST_POINTS, "1");
+  if (!Number.isInteger(count)) throw new EngineInputError("support.count", "must be a whole number");
+  return { kind: "points", count, at: share("radius", support.radius, radius, 0.05, 1) };
+}
+
+function share(field: string, length: number, radius: number, low: number, high: number): number {
+  return requireWithin(`support.${field}`, length, low * radius, high * radius, "m") / radius;
 }

@@ -3,7 +3,7 @@ import { requireCurvature, requireModulus, requireRadius, requireThickness, requ
 import { requireOrientation, type Orientation } from "../silicon/orientation.ts";
 import { arcSagitta } from "../stoney/bow.ts";
 import type { ShapeRegime } from "../vocabulary.ts";
-import { plateShape, type PlateKind, type PlateShape } from "./shape-model.ts";
+import { plateShape, reachedShape, type PlateKind, type PlateShape, type ReachedShape } from "./shape-model.ts";
 import type { CurvaturePair } from "./stable-state.ts";
 
 /** A free circular wafer of uniform thickness, or a stack by its effective thickness. */
@@ -28,7 +28,7 @@ export interface FreeWaferShapeInput extends PlateInput {
 }
 
 /** All bows are centre to rim along an axis, m, with the sign of the curvature: outside the engine use `standardBow`. */
-export interface FreeWaferShape {
+export interface ReachedWaferShape {
   regime: ShapeRegime;
   /** Along the axis that bends most. */
   bowMajor: number;
@@ -54,6 +54,9 @@ export interface FreeWaferShape {
   rollRadius: number | null;
   /** Load over the load at which the wafer starts to roll; from 1 on it is curled. */
   stabilityRatio: number;
+}
+
+export interface FreeWaferShape extends ReachedWaferShape {
   /** Genuinely different stable shapes under the same load. A roll about the other axis of the same size is not one. */
   alternatives: { bowMajor: number; bowMinor: number }[];
 }
@@ -98,8 +101,22 @@ export function shapeRegime(stabilityRatio: number, bow: number, off: number): S
  * of Freund 2000 is its approximation.
  */
 export function freeWaferShape(i: FreeWaferShapeInput): FreeWaferShape {
-  const { radius, thickness, scale, linear, load, kind } = dimensionless(i);
-  const shape = plateShape(load, kind);
+  const wafer = dimensionless(i);
+  const shape = plateShape(wafer.load, wafer.kind);
+  const sagitta = (curvature: number) => arcSagitta(curvature * wafer.scale, wafer.radius);
+  return { ...waferShape(wafer, shape), alternatives: shape.others.map((other) => bowsOf(other, sagitta)) };
+}
+
+/** The shape that the load leads to, as by `freeWaferShape`, without looking for others. */
+export function reachedWaferShape(i: FreeWaferShapeInput): ReachedWaferShape {
+  const wafer = dimensionless(i);
+  return waferShape(wafer, reachedShape(wafer.load, wafer.kind));
+}
+
+function waferShape(
+  { radius, thickness, scale, linear, load }: ReturnType<typeof dimensionless>,
+  shape: ReachedShape,
+): ReachedWaferShape {
   const swapped = Math.abs(alongX(shape.bow)) < Math.abs(alongY(shape.bow));
   const major = swapped ? alongY : alongX;
   const minor = swapped ? alongX : alongY;
@@ -126,7 +143,6 @@ export function freeWaferShape(i: FreeWaferShapeInput): FreeWaferShape {
     warp: bent * (shape.top + shape.dip),
     rollRadius: regime === "curled" && rolled > 0 ? 1 / rolled : null,
     stabilityRatio: shape.loadRatio,
-    alternatives: shape.others.map((other) => bowsOf(other, sagitta)),
   };
 }
 

@@ -21,7 +21,7 @@ export interface PlateKind {
  * Shape of a free plate beyond small deflections, without dimensions: curvatures times R²/(4h), heights over 2 h. Everything
  * that the rest of the engine knows about large deflections is behind this file.
  */
-export interface PlateShape extends Readings {
+export interface ReachedShape extends Readings {
   /** The area mean of the curvature along its own principal axes. */
   average: CurvaturePair;
   /** Lowest point below the centre and highest above it, both zero or more, of the shape or of its mirror image. */
@@ -33,6 +33,9 @@ export interface PlateShape extends Readings {
   turn: number;
   /** Load over the load at which the shape becomes unstable, as by `loadRatio`. */
   loadRatio: number;
+}
+
+export interface PlateShape extends ReachedShape {
   /** Bows of the other stable shapes of another size under the same load. */
   others: CurvaturePair[];
 }
@@ -45,18 +48,33 @@ export function criticalLoad(kind: PlateKind): number {
   return kind.crystal === "100" ? siliconPlates().soft.criticalLoad : isotropicPlate(kind.poissonsRatio).criticalLoad;
 }
 
-/** The shape under a load given as the two curvatures of small deflections. */
+/** The shape under a load given as the two curvatures of small deflections, with the others that the load could hold. */
 export function plateShape(load: CurvaturePair, kind: PlateKind): PlateShape {
-  const size = { mean: Math.abs(load.mean), halfDifference: Math.abs(load.halfDifference) };
-  const { plate, state, turn, readings } = mainState(size, kind);
-  const straight = straightPlate(kind);
-  const bows = alternativeBows(size, kind, straight, state).filter((bow) => !sameShape(bow, readings.bow));
-  const turned = turn === 0 ? 0 : turn * sign(load.halfDifference);
-  // A saddle of no mean may snap either way: up along x.
-  const signs = {
-    mean: sign(load.mean === 0 ? load.halfDifference : load.mean),
-    halfDifference: sign(load.halfDifference),
+  const { size, signs } = sizeAndSigns(load);
+  const main = mainState(size, kind);
+  const bows = alternativeBows(size, kind, straightPlate(kind), main.state);
+  const others = bows.filter((bow) => !sameShape(bow, main.readings.bow)).map((bow) => signed(bow, signs));
+  return { ...shapeOf(load, kind, main), others };
+}
+
+/** That shape alone. */
+export function reachedShape(load: CurvaturePair, kind: PlateKind): ReachedShape {
+  return shapeOf(load, kind, mainState(sizeAndSigns(load).size, kind));
+}
+
+/** The load with both parts zero or more, and what was taken from it. */
+function sizeAndSigns({ mean, halfDifference }: CurvaturePair) {
+  return {
+    size: { mean: Math.abs(mean), halfDifference: Math.abs(halfDifference) },
+    // A saddle of no mean may snap either way: up along x.
+    signs: { mean: sign(mean === 0 ? halfDifference : mean), halfDifference: sign(halfDifference) },
   };
+}
+
+function shapeOf(load: CurvaturePair, kind: PlateKind, { plate, state, turn, readings }: MainState): ReachedShape {
+  const { size, signs } = sizeAndSigns(load);
+  const straight = straightPlate(kind);
+  const turned = turn === 0 ? 0 : turn * sign(load.halfDifference);
   return {
     bow: signed(readings.bow, signs),
     centre: signed(readings.centre, signs),
@@ -68,7 +86,6 @@ export function plateShape(load: CurvaturePair, kind: PlateKind): PlateShape {
     top: rimTop(readings),
     turn: turned,
     loadRatio: Math.max(size.mean / criticalLoad(kind), size.halfDifference / straight.saddleLoad),
-    others: bows.map((bow) => signed(bow, signs)),
   };
 }
 

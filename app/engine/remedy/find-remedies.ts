@@ -1,4 +1,4 @@
-import { worstOutcome } from "../flow/assess.ts";
+import { worstOutcome } from "../flow/judge.ts";
 import type { FlowInput } from "../flow/model.ts";
 import type { Finding } from "../rules/finding.ts";
 import type { SiteLimits } from "../rules/limits.ts";

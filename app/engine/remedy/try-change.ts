@@ -1,6 +1,6 @@
 import { EngineInputError } from "../errors.ts";
 import type { FlowInput } from "../flow/model.ts";
-import { worstOutcome } from "../flow/assess.ts";
+import { worstOutcome } from "../flow/judge.ts";
 import type { Finding } from "../rules/finding.ts";
 import type { SiteLimits } from "../rules/limits.ts";
 import { RULES } from "../rules/rules.ts";

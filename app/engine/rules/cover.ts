@@ -2,7 +2,6 @@ import type { Measured } from "../measured.ts";
 import { bondedFace } from "../flow/bond.ts";
 import type { StepState } from "../flow/walk.ts";
 import { bumpCover } from "../thickness-budget/bump-cover.ts";
-import { bumpCoverWorking } from "../thickness-budget/working.ts";
 import { outcomeRank, type Outcome } from "../vocabulary.ts";
 import { againstLowerLimit, againstUpperLimit, exceeds } from "./against-limit.ts";
 import { bondMade } from "./bonded.ts";
@@ -48,21 +47,17 @@ export function covering(context: RuleContext, state: StepState): Finding[] {
   return taped && state.after.mountedSide === "front" ? inTape(context, state, tape?.embeddingDepth ?? null) : [];
 }
 
-function overDeviceSide(
-  { steps, limits }: RuleContext,
-  state: StepState,
-  cover: Omit<Cover, "feature" | "featureName">,
-) {
+function overDeviceSide(context: RuleContext, state: StepState, cover: Omit<Cover, "feature" | "featureName">) {
   const feature = tallest(state);
-  if (feature) return [against(state, limits, { ...feature, ...cover })];
-  return hasBumps(steps, state) ? [unknownHeight(state)] : [];
+  if (feature) return [against(context, state, { ...feature, ...cover })];
+  return hasBumps(context.steps, state) ? [unknownHeight(state)] : [];
 }
 
 /** On the back side stands what a via reveal has left standing, by the last step that says how far. */
-function overBackSide({ steps, limits }: RuleContext, state: StepState, cover: Omit<Cover, "feature" | "featureName">) {
-  const earlier = steps.slice(0, state.number - 1).map(({ step }) => step);
+function overBackSide(context: RuleContext, state: StepState, cover: Omit<Cover, "feature" | "featureName">) {
+  const earlier = context.steps.slice(0, state.number - 1).map(({ step }) => step);
   const feature = earlier.findLast(({ viaProtrusion }) => viaProtrusion)?.viaProtrusion;
-  if (feature) return feature.value > 0 ? [against(state, limits, { feature, featureName: "Vias", ...cover })] : [];
+  if (feature) return feature.value > 0 ? [against(context, state, { feature, featureName: "Vias", ...cover })] : [];
   if (!earlier.some(({ kind }) => kind === "via reveal")) return [];
   return [
     make(state, "cannot judge", "Vias stand out of the back side and how far is not given.", {
@@ -71,10 +66,10 @@ function overBackSide({ steps, limits }: RuleContext, state: StepState, cover: O
   ];
 }
 
-function inTape({ steps, limits }: RuleContext, state: StepState, depth: Measured | null): Finding[] {
+function inTape(context: RuleContext, state: StepState, depth: Measured | null): Finding[] {
   const tape = state.after.mount === "film frame" ? "dicing tape" : "grinding tape";
   const feature = tallest(state);
-  if (!state.after.bumps) return hasBumps(steps, state) ? [unknownHeight(state)] : [];
+  if (!state.after.bumps) return hasBumps(context.steps, state) ? [unknownHeight(state)] : [];
   if (!feature) return [];
   if (!depth)
     return [
@@ -99,13 +94,13 @@ function inTape({ steps, limits }: RuleContext, state: StepState, depth: Measure
         },
       ),
     ];
-  return [against(state, limits, { ...feature, cover: depth.value, coverName: "the embedding layer" })];
+  return [against(context, state, { ...feature, cover: depth.value, coverName: "the embedding layer" })];
 }
 
 /** Over the share is a caution while enough is left over the bumps; too little left fails. Tallest: height plus tolerance. */
 function against(
+  { limits, workings }: RuleContext,
   state: StepState,
-  limits: RuleContext["limits"],
   { feature, featureName, cover, coverName }: Cover,
 ): Finding {
   const height = feature.value + (feature.tolerance ?? 0);
@@ -123,7 +118,7 @@ function against(
     {
       remedy: `Cover them thicker, at least ${micrometres(Math.max(height / limits.coverShare.value, height + coverLeftClear.value))}, or make them lower.`,
       figures: [
-        { label: "Share of the cover that they take", value: ratio, unit: "1", working: bumpCoverWorking(input) },
+        { label: "Share of the cover that they take", value: ratio, unit: "1", working: workings?.bumpCover(input) ?? null },
         { label: "Left over them", value: left, unit: "m" },
       ],
       limit: siteLimit(limits, outcomeRank(byLeft) > outcomeRank(byShare) ? "coverLeft" : "coverShare"),

@@ -3,6 +3,7 @@ import type { FlowInput } from "../flow/model.ts";
 import type { StepState } from "../flow/walk.ts";
 import type { Outcome, SourceKind } from "../vocabulary.ts";
 import type { UnitSymbol, Working } from "../working.ts";
+import type { FindingWorkings } from "./finding-workings.ts";
 import type { LimitKey, SiteLimits } from "./limits.ts";
 
 /** A number in a finding, in SI, with its working when there is one. */
@@ -51,8 +52,8 @@ export interface RuleContext {
   limits: SiteLimits;
   steps: StepState[];
   uncertainty: StepUncertainty[];
-  /** false leaves out the workings of shapes, which cost as much as the shapes: for trials that nobody looks at; default true */
-  workings?: boolean;
+  /** derivations of the figures; null leaves them out, which saves as much as the shapes cost */
+  workings: FindingWorkings | null;
   /** the bond that a search tries others for: what only another bond is asked at a step that the choice leaves alone is left out */
   tried?: BondSpan;
 }
@@ -61,8 +62,11 @@ export interface RuleContext {
 export interface Rule {
   number: number;
   title: string;
-  /** what it asks, for the method page */
+  judge(context: RuleContext, state: StepState): Finding[];
+}
+
+/** What a rule asks in words, and the limits that it reads, for the method page. */
+export interface RuleAbout {
   asks: string;
   limits: LimitKey[];
-  judge(context: RuleContext, state: StepState): Finding[];
 }

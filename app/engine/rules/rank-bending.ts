@@ -1,4 +1,4 @@
-import type { FlowAssessment } from "../flow/assess.ts";
+import type { JudgedFlow } from "../flow/judge.ts";
 import { failureProbability, type WeibullStrength } from "../strength/weibull.ts";
 
 export interface RankedStep {
@@ -13,10 +13,7 @@ export interface RankedStep {
  * The steps at which rule 4 found a bending stress, the likeliest to break a wafer first. For engineers; never on a sheet.
  * Range and errors as `failureProbability`: far below the tested stresses it is an extrapolation.
  */
-export function rankBendingSteps(
-  { findings }: Pick<FlowAssessment, "findings">,
-  strength: WeibullStrength,
-): RankedStep[] {
+export function rankBendingSteps({ findings }: Pick<JudgedFlow, "findings">, strength: WeibullStrength): RankedStep[] {
   const stresses = new Map<number, number>();
   for (const { rule, step, figures } of findings) {
     if (rule !== 4) continue;

@@ -3,7 +3,7 @@ import { supportClassOf, supportRank, type Outcome } from "../vocabulary.ts";
 import { formatQuantity } from "../units/format.ts";
 import type { StepState } from "../flow/walk.ts";
 import { againstLowerLimit, reaches } from "./against-limit.ts";
-import type { Finding, Rule, RuleContext } from "./finding.ts";
+import type { Finding, Rule, RuleAbout, RuleContext } from "./finding.ts";
 import { LIMIT_DEFINITIONS, type LimitKey } from "./limits.ts";
 import { requiredSupport, type RequiredSupport } from "./required-support.ts";
 
@@ -154,6 +154,10 @@ function meets(context: RuleContext, state: StepState, required: RequiredSupport
 export const thicknessRule: Rule = {
   number: 1,
   title: TITLE,
+  judge,
+};
+
+export const aboutThickness: RuleAbout = {
   asks: "Is the wafer held by enough at this step, for its diameter, its thickness at nominal minus tolerance, and what the step does to it?",
   limits: [
     "bareFrom150",
@@ -169,5 +173,4 @@ export const thicknessRule: Rule = {
     "edgeRingLeast",
     "tapeTemperature",
   ],
-  judge,
 };

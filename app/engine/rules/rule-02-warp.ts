@@ -8,9 +8,8 @@ import { inSentence } from "../in-sentence.ts";
 import type { FaceUp, Outcome } from "../vocabulary.ts";
 import { FLAT_WITHIN_UNCERTAINTY, flatWithinUncertainty, outcomeRank } from "../vocabulary.ts";
 import { againstUpperLimit, exceeds } from "./against-limit.ts";
-import type { Finding, Rule, RuleContext } from "./finding.ts";
+import type { Finding, Rule, RuleAbout, RuleContext } from "./finding.ts";
 import { shareBeyond, sharedBy } from "./share-beyond.ts";
-import { shapeWorking } from "./warp-working.ts";
 
 const TITLE = "Warp on the tool";
 
@@ -74,7 +73,7 @@ function judge(context: RuleContext, state: StepState): Finding[] {
   return judged.slice(0, 1).map(({ shape, figures: [warp, ...figures], ...finding }) => ({
     ...finding,
     // A working costs as much as the shape itself, so only the finding that stays gets one.
-    figures: warp ? [{ ...warp, working: shapeWorking(context, shape) }, ...figures] : [],
+    figures: warp ? [{ ...warp, working: context.workings?.warp(shape) ?? null }, ...figures] : [],
   }));
 }
 
@@ -160,7 +159,10 @@ const capital = (text: string) => text.charAt(0).toUpperCase() + text.slice(1);
 export const warpRule: Rule = {
   number: 2,
   title: TITLE,
+  judge,
+};
+
+export const aboutWarp: RuleAbout = {
   asks: "Does the wafer or pair lie flat enough for the tool, as it is loaded, as it leaves, and at peak where the tool leaves it free, against the tool's limit for edges up and for edges down?",
   limits: ["warpMargin", "flatWithin"],
-  judge,
 };

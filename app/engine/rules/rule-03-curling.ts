@@ -2,9 +2,8 @@ import type { LyingShape } from "../flow/shape.ts";
 import type { StepState } from "../flow/walk.ts";
 import { againstUpperLimit, exceeds } from "./against-limit.ts";
 import { isBonded, whatLies } from "./bonded.ts";
-import type { Figure, Finding, Rule, RuleContext } from "./finding.ts";
+import type { Figure, Finding, Rule, RuleAbout, RuleContext } from "./finding.ts";
 import { findingsOf } from "./make-finding.ts";
-import { warpWorking } from "./warp-working.ts";
 import { height } from "./words.ts";
 import { formatQuantity } from "../units/format.ts";
 import { formatNumber } from "../units/format-number.ts";
@@ -26,14 +25,14 @@ function freeShapes(state: StepState): LyingShape[] {
   return shapes;
 }
 
-/** The shape let go has its working with the step, so it gets none here. */
-const figuresOf = (shape: LyingShape, working: "with working" | "without"): Figure[] => [
+/** The shape let go has its working with the step, so it is given none here. */
+const figuresOf = (shape: LyingShape, workings: RuleContext["workings"]): Figure[] => [
   { label: "Load over critical load", value: shape.stabilityRatio, unit: "1" },
   {
     label: "Edge lift",
     value: shape.warp,
     unit: "m",
-    working: working === "with working" ? warpWorking(shape) : null,
+    working: workings?.warp(shape) ?? null,
   },
 ];
 const limitOf = () => ({ label: "Critical load", value: CRITICAL, unit: "1" as const, source: "plate theory" });
@@ -47,12 +46,12 @@ function ifReleased(state: StepState): Finding[] {
       state,
       "clear",
       `Held by its ${step.planned}: curling is not judged. Do not release: it would roll to a radius of about ${radius(released)}, edges lifting ${height(released.warp)}.`,
-      { figures: figuresOf(released, "without"), limit: limitOf() },
+      { figures: figuresOf(released, null), limit: limitOf() },
     ),
   ];
 }
 
-function judge({ limits }: RuleContext, state: StepState): Finding[] {
+function judge({ limits, workings }: RuleContext, state: StepState): Finding[] {
   const shapes = freeShapes(state);
   const worst = shapes.reduce<LyingShape | null>(
     (most, shape) => (!most || shape.stabilityRatio > most.stabilityRatio ? shape : most),
@@ -74,7 +73,7 @@ function judge({ limits }: RuleContext, state: StepState): Finding[] {
       remedy: isBonded(state.after)
         ? "Choose a carrier or a bond that bows less, or leave more silicon."
         : "Plan tape, ring or carrier for this step, leave more silicon, or lower the film force.",
-      figures: figuresOf(worst, "with working"),
+      figures: figuresOf(worst, workings),
       limit: limitOf(),
     }),
     ...released,
@@ -84,7 +83,10 @@ function judge({ limits }: RuleContext, state: StepState): Finding[] {
 export const curlingRule: Rule = {
   number: 3,
   title: TITLE,
+  judge,
+};
+
+export const aboutCurling: RuleAbout = {
   asks: "Where the wafer or pair is free: does it stay clear of the load at which it rolls up about one axis? A held wafer is not judged; what it would do if released is said.",
   limits: ["curlMargin"],
-  judge,
 };

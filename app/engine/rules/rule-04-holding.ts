@@ -1,15 +1,13 @@
 import { chuckFlattening, type ChuckFlatteningInput } from "../chuck/chuck-flattening.ts";
-import { chuckSurfaceStressWorking } from "../chuck/working.ts";
 import type { EquipmentInput } from "../flow/model.ts";
 import { edgesUp, type LyingShape } from "../flow/shape.ts";
 import { bondLetGo, faceUpLoaded, type WaferState } from "../flow/state.ts";
 import type { StepState } from "../flow/walk.ts";
 import { siliconBiaxialModulus } from "../silicon/biaxial-modulus.ts";
 import { bendingStress } from "../strength/bending.ts";
-import { bendingStressWorking } from "../strength/working.ts";
 import { againstUpperLimit } from "./against-limit.ts";
 import { bondLeft, isBonded } from "./bonded.ts";
-import type { Figure, Finding, FindingLimit, Rule, RuleContext } from "./finding.ts";
+import type { Figure, Finding, FindingLimit, Rule, RuleAbout, RuleContext } from "./finding.ts";
 import type { LimitKey, SiteLimits } from "./limits.ts";
 import { findingsOf, siteLimit, statedLimit } from "./make-finding.ts";
 import { thinnest } from "./rule-01-thickness.ts";
@@ -84,11 +82,13 @@ function stressLimit(wafer: WaferState, limits: SiteLimits): { limit: FindingLim
 const FLATTENS = ["vacuum", "full-area vacuum", "electrostatic", "clamp ring"];
 
 /** Bending from free to flat, Pa. A roll is opened as a cylinder of its own radius, a bowl as a sphere. */
-function flatteningFigure({ shape, wafer }: Loaded, radius: number, orientation: "100" | "111"): Figure {
+function flatteningFigure({ flow, workings }: RuleContext, { shape, wafer }: Loaded): Figure {
+  const { diameter, orientation } = flow.wafer;
+  const radius = diameter / 2;
   const label = "Bending stress from free to flat";
   if (shape.rollRadius !== null && !isBonded(wafer)) {
     const roll = { thickness: wafer.silicon.value, radiusOfCurvature: shape.rollRadius, direction: "110" as const };
-    return { label, value: bendingStress(roll), unit: "Pa", working: bendingStressWorking(roll) };
+    return { label, value: bendingStress(roll), unit: "Pa", working: workings?.bendingStress(roll) ?? null };
   }
   const input: ChuckFlatteningInput = {
     radius,
@@ -98,7 +98,8 @@ function flatteningFigure({ shape, wafer }: Loaded, radius: number, orientation:
     curvature: (2 * shape.sagitta) / radius ** 2,
     vacuum: CHUCK_VACUUM,
   };
-  return { label, value: chuckFlattening(input).surfaceStress, unit: "Pa", working: chuckSurfaceStressWorking(input) };
+  const value = chuckFlattening(input).surfaceStress;
+  return { label, value, unit: "Pa", working: workings?.chuckStress(input) ?? null };
 }
 
 function stressed(
@@ -136,11 +137,11 @@ function farFromBreaking({ shape, wafer }: Loaded, radius: number, limits: SiteL
 
 /** Flattening of a whole wafer hardly ever counts, so it is said only where it does. */
 function flattening(context: RuleContext, state: StepState, loaded: Loaded): Finding[] {
-  const { diameter, orientation } = context.flow.wafer;
+  const { diameter } = context.flow.wafer;
   const gripped = state.step.planned === "thin-wafer gripper";
   if (!gripped && !FLATTENS.includes(state.step.equipment?.clamping ?? "")) return [];
   if (farFromBreaking(loaded, diameter / 2, context.limits)) return [];
-  const figure = flatteningFigure(loaded, diameter / 2, orientation);
+  const figure = flatteningFigure(context, loaded);
   const found = stressed(
     context,
     state,
@@ -165,7 +166,7 @@ function peeling(context: RuleContext, state: StepState): Finding[] {
     label: "Bending stress at the peel front",
     value: bendingStress(bend),
     unit: "Pa",
-    working: bendingStressWorking(bend),
+    working: context.workings?.bendingStress(bend) ?? null,
   };
   const where = `At the peel front, radius ${height(material.peelRadius.value)},`;
   return [stressed(context, state, state.before, figure, where, "Peel with a larger radius, or release by light.")];
@@ -184,6 +185,10 @@ function judge(context: RuleContext, state: StepState): Finding[] {
 export const holdingRule: Rule = {
   number: 4,
   title: TITLE,
+  judge,
+};
+
+export const aboutHolding: RuleAbout = {
   asks: "Does the gap under the wafer as it is loaded stay within what the chuck's seal closes, and the bending at chuck, gripper and peel front below the design stress of its edge? Pressure is never the limit.",
   limits: [
     "sealGapPlainClear",
@@ -195,5 +200,4 @@ export const holdingRule: Rule = {
     "stressGround",
     "stressRelieved",
   ],
-  judge,
 };

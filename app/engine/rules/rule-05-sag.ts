@@ -1,7 +1,6 @@
-import { gravitySag, type GravitySagInput } from "../gravity/gravity-sag.ts";
+import { carriedSag, type GravitySagInput } from "../gravity/gravity-sag.ts";
 import { siliconSagConstants } from "../gravity/silicon-sag-constants.ts";
-import type { Support } from "../gravity/support.ts";
-import { gravitySagWorking } from "../gravity/working.ts";
+import type { CarryingSupport } from "../gravity/support.ts";
 import type { Clamping } from "../flow/handling-inputs.ts";
 import type { LyingShape } from "../flow/shape.ts";
 import type { WaferState } from "../flow/state.ts";
@@ -10,7 +9,7 @@ import { SILICON_DENSITY } from "../silicon/density.ts";
 import { formatNumber } from "../units/format-number.ts";
 import { againstUpperLimit, exceeds } from "./against-limit.ts";
 import { isBonded, whatLies } from "./bonded.ts";
-import type { Finding, FindingLimit, Rule, RuleContext } from "./finding.ts";
+import type { Finding, FindingLimit, Rule, RuleAbout, RuleContext } from "./finding.ts";
 import { findingsOf, siteLimit, statedLimit } from "./make-finding.ts";
 import { arealMass, carrierDensity, USUAL_GLASS_DENSITY } from "./mass.ts";
 import { thinnest } from "./rule-01-thickness.ts";
@@ -26,7 +25,7 @@ const LEDGES_AT = 0.9;
 const PINS_AT = 0.7;
 
 /** What carries the wafer: ledges in a store, else as the tool clamps; null where it lies on a plate. */
-function supportOf(clamping: Clamping | null, inSlots: boolean, radius: number): Support | null {
+function supportOf(clamping: Clamping | null, inSlots: boolean, radius: number): CarryingSupport | null {
   switch (clamping) {
     case "ledges":
     case "boat":
@@ -40,14 +39,7 @@ function supportOf(clamping: Clamping | null, inSlots: boolean, radius: number):
   }
 }
 
-const WORDS: Record<Support["kind"], string> = {
-  rails: "on two ledges",
-  points: "on three points",
-  "edge-ring": "on a ring",
-  ring: "on a ring",
-  "centre-point": "on its centre",
-  "centre-cup": "on a cup",
-};
+const WORDS: Record<CarryingSupport["kind"], string> = { rails: "on two ledges", points: "on three points" };
 
 /** Clearance that sag and warp may take, with the margin below it that is a caution; null where none is known. */
 function clearanceOf({ flow, limits }: RuleContext, state: StepState, inSlots: boolean) {
@@ -63,8 +55,10 @@ function clearanceOf({ flow, limits }: RuleContext, state: StepState, inSlots: b
     : { limit: siteLimit(limits, "slot200"), margin: limits.slot200.value - limits.slotClear200.value };
 }
 
+type CarriedPlate = GravitySagInput & { support: CarryingSupport };
+
 /** The plate that sags: silicon at its thinnest, or a pair by its effective thickness and its own weight. */
-function plateOf({ flow }: RuleContext, state: StepState, shape: LyingShape, support: Support): GravitySagInput {
+function plateOf({ flow }: RuleContext, state: StepState, shape: LyingShape, support: CarryingSupport): CarriedPlate {
   const { diameter, orientation } = flow.wafer;
   const { youngsModulus, poissonsRatio } = siliconSagConstants(orientation, support);
   const paired = isBonded(state.after);
@@ -79,7 +73,7 @@ function sagging(context: RuleContext, state: StepState, shape: LyingShape): Fin
   const support = supportOf(state.step.equipment?.clamping ?? null, inSlots, context.flow.wafer.diameter / 2);
   if (!clearance || !support) return [];
   const plate = plateOf(context, state, shape, support);
-  const sag = gravitySag(plate);
+  const sag = carriedSag(plate);
   const least = sag.largeDeflection?.low ?? sag.peakToValley;
   const most = sag.peakToValley;
   const paired = isBonded(state.after);
@@ -100,7 +94,12 @@ function sagging(context: RuleContext, state: StepState, shape: LyingShape): Fin
           ? "Use every second slot, or a box with more clearance."
           : "Plan tape, ring or carrier here, or use every second slot.",
         figures: [
-          { label: "Sag by small deflections", value: most, unit: "m", working: gravitySagWorking(plate) },
+          {
+            label: "Sag by small deflections",
+            value: most,
+            unit: "m",
+            working: context.workings?.sag(plate) ?? null,
+          },
           { label: "Warp", value: shape.warp, unit: "m" },
           { label: "Sag plus warp", value: most + shape.warp, unit: "m" },
         ],
@@ -174,7 +173,10 @@ function judge(context: RuleContext, state: StepState): Finding[] {
 export const sagRule: Rule = {
   number: 5,
   title: TITLE,
+  judge,
+};
+
+export const aboutSag: RuleAbout = {
   asks: "Do sag under its own weight and warp together fit the slot or clearance, and the weight and total thickness of the pair the robot and aligner? Where this is stricter than the thickness rule, it decides.",
   limits: ["slotClear200", "slot200", "slotClear300", "slot300", "warpMargin"],
-  judge,
 };

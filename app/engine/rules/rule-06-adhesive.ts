@@ -9,7 +9,7 @@ import { bondChemistry } from "./bond-chemistry.ts";
 import { bondThickness } from "./bond-thickness.ts";
 import { bondsAsked, bondsStaying } from "./bonded.ts";
 import { againstUpperLimit, exceeds, reaches } from "./against-limit.ts";
-import type { Finding, Rule, RuleContext } from "./finding.ts";
+import type { Finding, Rule, RuleAbout, RuleContext } from "./finding.ts";
 import { celsius, duration } from "./words.ts";
 
 const TITLE = "Bonding material";
@@ -119,7 +119,10 @@ function aboveSoftening(state: StepState, material: BondMaterial, softensAt: num
 export const adhesiveRule: Rule = {
   number: 6,
   title: TITLE,
+  judge,
+};
+
+export const aboutAdhesive: RuleAbout = {
   asks: "Is each bond as thick as its material is made for? Does each bonding material that is there stay below its temperature limit with its margin and hold time, and below the point where it flows; does it stand the vacuum, chemicals and light of every step between its bond and its debond, and all their heat together?",
   limits: ["adhesiveMargin", "weightLossClear", "weightLoss", "heatingFrom"],
-  judge,
 };

@@ -6,11 +6,10 @@ import type { StepState } from "../flow/walk.ts";
 import { standardBow } from "../stoney/bow.ts";
 import { againstUpperLimit, exceeds } from "./against-limit.ts";
 import { bondMade, bondsAsked } from "./bonded.ts";
-import type { Finding, Rule, RuleContext } from "./finding.ts";
+import type { Finding, Rule, RuleAbout, RuleContext } from "./finding.ts";
 import { findingsOf, siteLimit, statedLimit, temperatureFigure } from "./make-finding.ts";
 import { releasePath } from "./release-path.ts";
 import { thinnest } from "./rule-01-thickness.ts";
-import { shapeWorking } from "./warp-working.ts";
 import { celsius, micrometres, millimetres, wholeMicrometres } from "./words.ts";
 
 const TITLE = "Carrier";
@@ -18,13 +17,13 @@ const make = findingsOf(7, TITLE);
 
 /** The pair as it comes out of the bond against the bonder: a match is judged by this bow, never by expansions alone. */
 function pairBow(context: RuleContext, state: StepState, shape: LyingShape, { carrier }: BondState): Finding[] {
-  const { limits } = context;
+  const { limits, workings } = context;
   const tool = state.step.equipment;
   const up = edgesUp(shape, state.after.faceUp);
   const direction = up ? "edges up" : "edges down";
   const limit = up ? tool?.warpLimitEdgesUp : tool?.warpLimitEdgesDown;
   const figures: Finding["figures"] = [
-    { label: "Warp of the pair", value: shape.warp, unit: "m", working: shapeWorking(context, shape) },
+    { label: "Warp of the pair", value: shape.warp, unit: "m", working: workings?.warp(shape) ?? null },
     { label: "Bow, device side up", value: standardBow(shape.sagitta), unit: "m" },
   ];
   const how = exceeds(shape.warp, limits.flatWithin.value) ? direction : "flat,";
@@ -195,7 +194,10 @@ function judge(context: RuleContext, state: StepState): Finding[] {
 export const carrierRule: Rule = {
   number: 7,
   title: TITLE,
+  judge,
+};
+
+export const aboutCarrier: RuleAbout = {
   asks: "Does the carrier match by the computed bow of the pair; does the light or solvent that lets it go pass it; does it fit the trimmed wafer, take the heat, hold and show on the tool, and have uses left?",
   limits: ["warpMargin", "flatWithin", "printThroughBelow"],
-  judge,
 };

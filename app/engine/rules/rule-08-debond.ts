@@ -5,7 +5,7 @@ import { ROOM_TEMPERATURE } from "../laminate/layer.ts";
 import { supportRank } from "../vocabulary.ts";
 import { againstUpperLimit, exceeds } from "./against-limit.ts";
 import { bondLeft, isBonded } from "./bonded.ts";
-import type { Finding, Rule, RuleContext } from "./finding.ts";
+import type { Finding, Rule, RuleAbout, RuleContext } from "./finding.ts";
 import { findingsOf, statedLimit, temperatureFigure } from "./make-finding.ts";
 import { staysOn } from "./other-carrier.ts";
 import { peel } from "./peel.ts";
@@ -146,7 +146,10 @@ function remover({ steps }: RuleContext, state: StepState): Finding[] {
 export const debondRule: Rule = {
   number: 8,
   title: TITLE,
+  judge,
+};
+
+export const aboutDebond: RuleAbout = {
   asks: "Is a thin wafer on tape, ring or another carrier before it leaves its carrier, never free between tape and frame; do the tape and the solder stand the debond's heat, the tape the remover, and the bumps the peel or slide; does the bond that is to stay hold when the other is let go?",
   limits: ["tapeTemperature", "solderMargin", "warpMargin"],
-  judge,
 };

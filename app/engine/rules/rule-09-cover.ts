@@ -2,10 +2,9 @@ import type { Measured } from "../measured.ts";
 import { bondOn, type BondState } from "../flow/bond.ts";
 import type { StepState } from "../flow/walk.ts";
 import { thicknessBudget, type ThicknessContribution } from "../thickness-budget/thickness-budget.ts";
-import { thicknessBudgetWorking } from "../thickness-budget/working.ts";
 import { againstUpperLimit, exceeds } from "./against-limit.ts";
 import { covering } from "./cover.ts";
-import type { Finding, FindingLimit, Rule, RuleContext } from "./finding.ts";
+import type { Finding, FindingLimit, Rule, RuleAbout, RuleContext } from "./finding.ts";
 import { findingsOf } from "./make-finding.ts";
 import { micrometres } from "./words.ts";
 
@@ -57,7 +56,7 @@ function budget(context: RuleContext, state: StepState): Finding[] {
   const missing = parts.filter(({ variation }) => variation === null).map(({ name }) => name);
   // On tape nobody asks for it unless the tape's own variation is known.
   if (!bond && missing.length > 0) return [];
-  return [known.length === 0 ? unknownVariation(state, missing) : inBudget(state, known, missing)];
+  return [known.length === 0 ? unknownVariation(state, missing) : inBudget(context, state, known, missing)];
 }
 
 function unknownVariation(state: StepState, missing: string[]): Finding {
@@ -66,7 +65,12 @@ function unknownVariation(state: StepState, missing: string[]): Finding {
   });
 }
 
-function inBudget(state: StepState, contributions: ThicknessContribution[], missing: string[]): Finding {
+function inBudget(
+  { workings }: RuleContext,
+  state: StepState,
+  contributions: ThicknessContribution[],
+  missing: string[],
+): Finding {
   const protrusion = state.step.viaProtrusion ?? null;
   const input = {
     contributions,
@@ -88,13 +92,13 @@ function inBudget(state: StepState, contributions: ThicknessContribution[], miss
       label: "Thickness variation, linear",
       value: linear,
       unit: "m",
-      working: thicknessBudgetWorking(input, "linear"),
+      working: workings?.thicknessBudget(input, "linear") ?? null,
     },
     {
       label: "Thickness variation, root-sum-square",
       value: rootSumSquare,
       unit: "m",
-      working: thicknessBudgetWorking(input, "root sum square"),
+      working: workings?.thicknessBudget(input, "root sum square") ?? null,
     },
   ];
   const both = `${sum} = ${micrometres(linear)} linear, ${micrometres(rootSumSquare)} root-sum-square`;
@@ -114,7 +118,10 @@ function inBudget(state: StepState, contributions: ThicknessContribution[], miss
 export const coverRule: Rule = {
   number: 9,
   title: TITLE,
+  judge: (context, state) => [...covering(context, state), ...budget(context, state)],
+};
+
+export const aboutCover: RuleAbout = {
   asks: "Is what stands on the face that is bonded or taped covered by adhesive or embedding layer, with enough left over it, and does the thickness variation of carrier, adhesive and grind stay within a tenth of the final silicon and the protrusion of its vias?",
   limits: ["coverShare", "coverLeft", "coverLeftClear"],
-  judge: (context, state) => [...covering(context, state), ...budget(context, state)],
 };

@@ -1,6 +1,6 @@
 import type { StepState } from "../flow/walk.ts";
 import { againstLowerLimit, exceeds, reaches } from "./against-limit.ts";
-import type { Finding, Rule, RuleContext } from "./finding.ts";
+import type { Finding, Rule, RuleAbout, RuleContext } from "./finding.ts";
 import { findingsOf, siteLimit } from "./make-finding.ts";
 import { thinnest } from "./rule-01-thickness.ts";
 import { micrometres } from "./words.ts";
@@ -114,7 +114,10 @@ function relief({ steps, limits }: RuleContext, state: StepState): Finding[] {
 export const edgeRule: Rule = {
   number: 10,
   title: TITLE,
+  judge: (context, state) => [...trimDepth(context, state), ...untrimmed(context, state), ...relief(context, state)],
+};
+
+export const aboutEdge: RuleAbout = {
   asks: "Is the edge trimmed before the grind, deeper than the silicon that stays, and is the damage of the grind taken off where the silicon is thin?",
   limits: ["trimBelow", "trimAdvisedBelow", "trimReserve", "reliefBelow", "reliefAdvisedBelow"],
-  judge: (context, state) => [...trimDepth(context, state), ...untrimmed(context, state), ...relief(context, state)],
 };

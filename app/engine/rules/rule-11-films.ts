@@ -5,7 +5,7 @@ import { timesReached } from "../flow/temperature-profile.ts";
 import { ROOM_TEMPERATURE } from "../laminate/layer.ts";
 import { outcomeRank } from "../vocabulary.ts";
 import { againstUpperLimit, exceeds, reaches } from "./against-limit.ts";
-import type { Finding, Rule, RuleContext } from "./finding.ts";
+import type { Finding, Rule, RuleAbout, RuleContext } from "./finding.ts";
 import { findingsOf, siteLimit, statedLimit, temperatureFigure } from "./make-finding.ts";
 import { firstToMelt, solderMelting } from "./solder.ts";
 import { celsius } from "./words.ts";
@@ -154,7 +154,10 @@ function judge(context: RuleContext, state: StepState): Finding[] {
 export const filmsRule: Rule = {
   number: 11,
   title: TITLE,
+  judge,
+};
+
+export const aboutFilms: RuleAbout = {
   asks: "Does every film stay below its temperature limit, and does solder melt in its reflows only, and not too often? The reflow that forms a ball is no error.",
   limits: ["mostReflows"],
-  judge,
 };

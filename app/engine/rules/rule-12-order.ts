@@ -6,7 +6,7 @@ import { SIDE_NAMES } from "../vocabulary.ts";
 import { againstUpperLimit, exceeds } from "./against-limit.ts";
 import { BOND_CHECKS, carriersOf, type Check } from "./bond-order.ts";
 import { isBonded } from "./bonded.ts";
-import type { Finding, Rule, RuleContext } from "./finding.ts";
+import type { Finding, Rule, RuleAbout, RuleContext } from "./finding.ts";
 import { tapeHeatLimit } from "./tape.ts";
 import { celsius, micrometres as um, millimetres as mm } from "./words.ts";
 
@@ -196,7 +196,10 @@ function judge(context: RuleContext, state: StepState): Finding[] {
 export const orderRule: Rule = {
   number: 12,
   title: TITLE,
+  judge,
+};
+
+export const aboutOrder: RuleAbout = {
   asks: "Can the steps be done in this order: nothing below zero, nothing unmounted diced, debond of what is bonded and of the face that is said, nothing done under a carrier, clean after debond, tape off before heat or vacuum, trim before grind, a second carrier only on the other face, and does the wafer or its carrier fit the tool?",
   limits: ["tapeTemperature"],
-  judge,
 };

@@ -4,7 +4,7 @@ import type { StepState } from "../flow/walk.ts";
 import { provenance } from "../measured.ts";
 import { againstUpperLimit } from "./against-limit.ts";
 import { dayOf } from "./calendar.ts";
-import type { Finding, Rule, RuleContext } from "./finding.ts";
+import type { Finding, Rule, RuleAbout, RuleContext } from "./finding.ts";
 import { findingsOf, siteLimit } from "./make-finding.ts";
 import { micrometres, percent } from "./words.ts";
 
@@ -84,7 +84,10 @@ function judge(context: RuleContext, state: StepState): Finding[] {
 export const provenanceRule: Rule = {
   number: 13,
   title: TITLE,
+  judge,
+};
+
+export const aboutProvenance: RuleAbout = {
   asks: "Do the film stresses come from measurements that are recent, in the state in which they are used, and at the thickness at which they are used?",
   limits: ["recordAge", "recordThickness"],
-  judge,
 };

@@ -3,10 +3,9 @@ import type { StepState } from "../flow/walk.ts";
 import { inSentence } from "../in-sentence.ts";
 import { siliconBiaxialModulus } from "../silicon/biaxial-modulus.ts";
 import { stoneyCurvature } from "../stoney/stoney.ts";
-import { stoneyCurvatureWorking } from "../stoney/working.ts";
 import { reaches } from "./against-limit.ts";
 import { bondsStaying, isBonded, whatLies } from "./bonded.ts";
-import type { Finding, Rule, RuleContext } from "./finding.ts";
+import type { Finding, Rule, RuleAbout, RuleContext } from "./finding.ts";
 import { findingsOf, siteLimit } from "./make-finding.ts";
 import { celsius, percent } from "./words.ts";
 
@@ -17,7 +16,7 @@ const make = findingsOf(14, TITLE);
 const THIN = 1e-6;
 
 /** How far the thin-film formula is off the laminate; said where it matters, because the laminate is what is used. */
-function thinFilm({ flow, limits }: RuleContext, state: StepState): Finding[] {
+function thinFilm({ flow, limits, workings }: RuleContext, state: StepState): Finding[] {
   const { atRoom, after, step, filmForce } = state;
   // The shape that a wafer came in with is no film's, so the film forces alone do not make the bow.
   if (!atRoom || isBonded(after) || after.incoming || step.adds.length === 0 || atRoom.warp <= limits.flatWithin.value)
@@ -43,7 +42,7 @@ function thinFilm({ flow, limits }: RuleContext, state: StepState): Finding[] {
             label: "Curvature by the thin-film formula",
             value: thin,
             unit: "1/m",
-            working: stoneyCurvatureWorking(input),
+            working: workings?.stoneyCurvature(input) ?? null,
           },
         ],
         limit: siteLimit(limits, "stoneyWithin"),
@@ -95,7 +94,10 @@ function judge(context: RuleContext, state: StepState): Finding[] {
 export const validityRule: Rule = {
   number: 14,
   title: TITLE,
+  judge,
+};
+
+export const aboutValidity: RuleAbout = {
   asks: "Is the answer within the range of the models: the laminate where thin-film formulas end, a shape that does not close, a pair below the softening of its bond where it is free?",
   limits: ["stoneyWithin", "flatWithin"],
-  judge,
 };

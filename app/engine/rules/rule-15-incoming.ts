@@ -1,7 +1,7 @@
 import type { StepState } from "../flow/walk.ts";
 import type { Measured } from "../measured.ts";
 import { againstLowerLimit, againstUpperLimit } from "./against-limit.ts";
-import type { Finding, Rule, RuleContext } from "./finding.ts";
+import type { Finding, Rule, RuleAbout, RuleContext } from "./finding.ts";
 import { findingsOf, statedLimit } from "./make-finding.ts";
 import { outcomeRank } from "../vocabulary.ts";
 import { micrometres, wholeMicrometres } from "./words.ts";
@@ -121,7 +121,10 @@ function inspected(state: StepState, lot: Lot): Finding[] {
 export const incomingRule: Rule = {
   number: 15,
   title: TITLE,
+  judge,
+};
+
+export const aboutIncoming: RuleAbout = {
   asks: "Does the lot come in as the flow was assessed: bow, warp, thickness, edges without chips, identity? Without a lot there is nothing to judge.",
   limits: [],
-  judge,
 };

@@ -1,7 +1,7 @@
 import type { StepState } from "../flow/walk.ts";
 import { ROOM_TEMPERATURE } from "../laminate/layer.ts";
 import { againstUpperLimit, exceeds } from "./against-limit.ts";
-import type { Finding, Rule, RuleContext } from "./finding.ts";
+import type { Finding, Rule, RuleAbout, RuleContext } from "./finding.ts";
 import { findingsOf, temperatureFigure } from "./make-finding.ts";
 import { againstExposures, type DecidedExposure } from "./resistance.ts";
 import { onTape, tapeHeatLimit, tapeName } from "./tape.ts";
@@ -70,7 +70,10 @@ function judge(context: RuleContext, state: StepState): Finding[] {
 export const tapeRule: Rule = {
   number: 16,
   title: TITLE,
+  judge,
+};
+
+export const aboutTape: RuleAbout = {
   asks: "Does the tape or frame stand the heat, vacuum, chemicals and light of the step? Its own data decide where there are any. Days on tape are the clocks' rule, bumps in its embedding layer the cover rule.",
   limits: ["tapeTemperature"],
-  judge,
 };

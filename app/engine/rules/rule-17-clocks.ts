@@ -4,7 +4,7 @@ import { heatDuration } from "../flow/temperature-profile.ts";
 import type { StepState } from "../flow/walk.ts";
 import { againstUpperLimit, exceeds, reaches } from "./against-limit.ts";
 import { isBonded } from "./bonded.ts";
-import type { Finding, FindingLimit, Rule, RuleContext } from "./finding.ts";
+import type { Finding, FindingLimit, Rule, RuleAbout, RuleContext } from "./finding.ts";
 import type { LimitKey } from "./limits.ts";
 import { findingsOf, siteLimit, statedLimit } from "./make-finding.ts";
 import { capital, duration } from "./words.ts";
@@ -178,7 +178,10 @@ function moisture(context: RuleContext, state: StepState): Finding[] {
 export const clocksRule: Rule = {
   number: 17,
   title: TITLE,
+  judge: (context, state) => [...moisture(context, state), ...spans(context, state), ...tapeTime(context, state)],
+};
+
+export const aboutClocks: RuleAbout = {
   asks: "Is what takes up water baked before vacuum, and are the red lines kept: grind to stress relief, bond to grind, debond to clean, days on tape?",
   limits: ["reliefWithin", "grindWithin", "cleanWithin", "tapeWithin", "clockMargin", "dryFor", "dryFrom"],
-  judge: (context, state) => [...moisture(context, state), ...spans(context, state), ...tapeTime(context, state)],
 };

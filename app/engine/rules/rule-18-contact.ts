@@ -1,7 +1,7 @@
 import { bondOn } from "../flow/bond.ts";
 import { bondLetGo } from "../flow/state.ts";
 import type { StepState } from "../flow/walk.ts";
-import type { Finding, Rule, RuleContext } from "./finding.ts";
+import type { Finding, Rule, RuleAbout, RuleContext } from "./finding.ts";
 import { findingsOf } from "./make-finding.ts";
 import { hasBumps } from "./solder.ts";
 
@@ -53,7 +53,10 @@ function charged(state: StepState): Finding[] {
 export const contactRule: Rule = {
   number: 18,
   title: TITLE,
+  judge: (context, state) => [...touched(context, state), ...charged(state)],
+};
+
+export const aboutContact: RuleAbout = {
   asks: "Which face is touched and with what: no pad on bumps or open films, and no charge left by a peel?",
   limits: [],
-  judge: (context, state) => [...touched(context, state), ...charged(state)],
 };

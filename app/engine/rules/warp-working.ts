@@ -3,7 +3,6 @@ import { directionalLaminateWorking } from "../directional/working.ts";
 import { laminateWorking } from "../laminate/working.ts";
 import { freeWaferShapeWorking } from "../plate/working.ts";
 import type { Working } from "../working.ts";
-import type { RuleContext } from "./finding.ts";
 
 /** The working of a warp: the free disc's shape, from the curvature of the laminate at that temperature. */
 export function warpWorking(shape: LyingShape): Working {
@@ -25,9 +24,4 @@ function laminateWorkings({ layers, unequal, temperature, slidingOn }: LyingShap
   return (["curvatureX", "curvatureY"] as const).map((part) =>
     directionalLaminateWorking(unequal.layers, part, { temperature }),
   );
-}
-
-/** The working of a shape for a finding; none in a trial that asks for none. */
-export function shapeWorking({ workings = true }: Pick<RuleContext, "workings">, shape: LyingShape): Working | null {
-  return workings ? warpWorking(shape) : null;
 }

@@ -1,41 +1,36 @@
-import { firstOrderUncertainty, type FirstOrderUncertainty } from "../uncertainty/first-order.ts";
+import { reachedWaferShape } from "../plate/free-wafer-shape.ts";
+import { firstOrderSpread, type FirstOrderSpread } from "../uncertainty/first-order-spread.ts";
 import type { ScalarModel } from "../uncertainty/model.ts";
 import type { UncertainQuantity } from "../uncertainty/quantity.ts";
-import { estimateStack } from "./estimate-stack.ts";
-import type { StackFilm, StackInput } from "./model.ts";
+import { freeDisc } from "./estimate-stack.ts";
+import type { StackInput } from "./model.ts";
 
 /** What of a stack has a tolerance. Films are counted from 1 in the stack's own order; thickness in m, stress in Pa. */
 interface Varied {
   input: UncertainQuantity;
-  /** the stack with another value of it */
-  into(stack: StackInput, value: number): StackInput;
+  /** writes another value of it into a copy of the stack */
+  put(copy: StackInput, value: number): void;
 }
 
 function rectangular(name: string, value: number, halfWidth: number | undefined): UncertainQuantity | null {
   return halfWidth === undefined || halfWidth === 0 ? null : { name, value, distribution: "rectangular", halfWidth };
 }
 
-const withFilm = (stack: StackInput, index: number, change: Partial<StackFilm>): StackInput => ({
-  ...stack,
-  films: stack.films.map((film, at) => (at === index ? { ...film, ...change } : film)),
-});
-
 function varied({ wafer, films }: StackInput): Varied[] {
   const found: Varied[] = [];
-  const add = (input: UncertainQuantity | null, into: Varied["into"]) => {
-    if (input) found.push({ input, into });
+  const add = (input: UncertainQuantity | null, put: Varied["put"]) => {
+    if (input) found.push({ input, put });
   };
-  add(rectangular("silicon thickness", wafer.thickness, wafer.thicknessTolerance), (stack, thickness) => ({
-    ...stack,
-    wafer: { ...stack.wafer, thickness },
-  }));
+  add(rectangular("silicon thickness", wafer.thickness, wafer.thicknessTolerance), (copy, thickness) => {
+    copy.wafer.thickness = thickness;
+  });
   films.forEach((film, index) => {
-    add(rectangular(`thickness of film ${index + 1}`, film.thickness, film.thicknessTolerance), (stack, thickness) =>
-      withFilm(stack, index, { thickness }),
-    );
-    add(rectangular(`stress of film ${index + 1}`, film.stress, film.stressTolerance), (stack, stress) =>
-      withFilm(stack, index, { stress }),
-    );
+    const setIn = (property: "thickness" | "stress") => (copy: StackInput, value: number) => {
+      const copied = copy.films[index];
+      if (copied) copied[property] = value;
+    };
+    add(rectangular(`thickness of film ${index + 1}`, film.thickness, film.thicknessTolerance), setIn("thickness"));
+    add(rectangular(`stress of film ${index + 1}`, film.stress, film.stressTolerance), setIn("stress"));
   });
   return found;
 }
@@ -45,8 +40,11 @@ export function warpModel(stack: StackInput): { inputs: UncertainQuantity[]; mod
   const parts = varied(stack);
   return {
     inputs: parts.map(({ input }) => input),
-    model: (values) =>
-      estimateStack(parts.reduce((moved, { into }, n) => into(moved, values[n] ?? 0), stack)).shape.warp,
+    model: (values) => {
+      const copy = { ...stack, wafer: { ...stack.wafer }, films: stack.films.map((film) => ({ ...film })) };
+      parts.forEach(({ put }, n) => put(copy, values[n] ?? 0));
+      return reachedWaferShape(freeDisc(copy).disc).warp;
+    },
   };
 }
 
@@ -55,7 +53,7 @@ export function warpModel(stack: StackInput): { inputs: UncertainQuantity[]; mod
  * distribution (JCGM 100:2008, 4.3.7), to first order; what has no tolerance counts as exact. Null when nothing has one.
  * @throws EngineInputError naming the input
  */
-export function warpUncertainty(stack: StackInput): FirstOrderUncertainty | null {
+export function warpUncertainty(stack: StackInput): FirstOrderSpread | null {
   const { inputs, model } = warpModel(stack);
-  return inputs.length === 0 ? null : firstOrderUncertainty({ model, inputs });
+  return inputs.length === 0 ? null : firstOrderSpread(model, inputs);
 }

@@ -51,7 +51,7 @@ export function walkVariant(base: WalkedFlow, variant: FlowInput, limits: SiteLi
 
 /** What rules are given in a trial: nominal values, without uncertainties and workings. Outcomes are those of the assessment. */
 export function trialContext({ flow, steps }: WalkedFlow, limits: SiteLimits): RuleContext {
-  return { flow, limits, steps, uncertainty: [], workings: false };
+  return { flow, limits, steps, uncertainty: [], workings: null };
 }
 
 /** What some rules find at all steps of a walked flow, in the order of an assessment. */

@@ -1,9 +1,8 @@
-import { EngineInputError } from "../errors.ts";
 import { combineUncertainty } from "./combine.ts";
 import { correlationMatrix, type Correlation } from "./correlation.ts";
-import { scalarModel, type BlockModel, type ScalarModel } from "./model.ts";
-import { rootSumOfSquares } from "./random/elementary.ts";
-import { checkQuantities, reach, spreadUncertainty, type Spread, type UncertainQuantity } from "./quantity.ts";
+import type { BlockModel, ScalarModel } from "./model.ts";
+import { bends, probeOf, wholeUncertainty } from "./probe.ts";
+import { checkQuantities, spreadUncertainty, type Spread, type UncertainQuantity } from "./quantity.ts";
 
 /** One input's line of a budget. */
 export interface BudgetLine {
@@ -36,9 +35,6 @@ export interface FirstOrderUncertainty extends Budget {
   remark: string;
 }
 
-/** Departure from a straight line, in standard uncertainties of the figure, from which on the model counts as bent. */
-const STRAIGHT_WITHIN = 0.1;
-
 export interface FirstOrderInput {
   model: ScalarModel | BlockModel;
   inputs: readonly UncertainQuantity[];
@@ -60,14 +56,17 @@ export function firstOrderUncertainty(i: FirstOrderInput): FirstOrderUncertainty
   const { inputs, correlations = [] } = i;
   checkQuantities(inputs);
   const matrix = correlationMatrix(inputs, correlations);
-  const probe = probeOf(scalarModel(i.model), inputs);
+  const probe = probeOf(i.model, inputs);
   const value = probe.atBest;
-  const common = inputs.map((input, n) => probe.line(n, input.name, input));
-  const wafers = inputs.map((input, n) => probe.line(n, input.name, input.betweenWafers ?? { distribution: "exact" }));
+  const common = inputs.map((input, n) => line(probe, n, input.name, input));
+  const wafers = inputs.map((input, n) => line(probe, n, input.name, input.betweenWafers ?? { distribution: "exact" }));
   const total = Math.hypot(combined(common, matrix), combined(wafers, null));
   const departures = inputs
-    .map((input, n) => ({ input: input.name, departure: total === 0 ? 0 : probe.departure(n, input) / total }))
-    .filter(({ departure }) => departure > STRAIGHT_WITHIN)
+    .map((input, n) => ({
+      input: input.name,
+      departure: total === 0 ? 0 : probe.departure(n, input, slope(probe, n, input)) / total,
+    }))
+    .filter(({ departure }) => bends(departure))
     .sort((a, b) => b.departure - a.departure);
   return {
     value,
@@ -83,63 +82,21 @@ export function firstOrderUncertainty(i: FirstOrderInput): FirstOrderUncertainty
 
 /** Slopes of a model at its best estimates, one per input, each over one standard uncertainty of the whole input. */
 export function slopes(model: ScalarModel | BlockModel, inputs: readonly UncertainQuantity[]): Float64Array {
-  const probe = probeOf(scalarModel(model), inputs);
-  return Float64Array.from(inputs, (input, n) => probe.slope(n, wholeUncertainty(input)));
+  const probe = probeOf(model, inputs);
+  return Float64Array.from(inputs, (input, n) => slope(probe, n, input));
 }
 
-/** Standard uncertainty of an input with both its parts. */
-export function wholeUncertainty(input: UncertainQuantity): number {
-  return rootSumOfSquares([spreadUncertainty(input), input.betweenWafers ? spreadUncertainty(input.betweenWafers) : 0]);
+type Probe = ReturnType<typeof probeOf>;
+
+function slope(probe: Probe, n: number, input: UncertainQuantity): number {
+  const u = wholeUncertainty(input);
+  return u === 0 ? 0 : probe.half(n, u) / u;
 }
 
-function probeOf(model: ScalarModel, inputs: readonly UncertainQuantity[]) {
-  const row = Float64Array.from(inputs, ({ value }) => value);
-  const atBest = figure(model, row);
-  const moved = (n: number, by: number): number | null => {
-    const best = row[n] ?? 0;
-    row[n] = best + by;
-    try {
-      return figure(model, row);
-    } catch (error) {
-      if (error instanceof EngineInputError) return null;
-      throw error;
-    } finally {
-      row[n] = best;
-    }
-  };
-  const half = (n: number, by: number): number => {
-    if (by === 0) return 0;
-    const [up, down] = [moved(n, by), moved(n, -by)];
-    if (up === null) return down === null ? 0 : atBest - down;
-    return down === null ? up - atBest : (up - down) / 2;
-  };
-  const slope = (n: number, u: number) => (u === 0 ? 0 : half(n, u) / u);
-  return {
-    atBest,
-    slope,
-    line(n: number, input: string, spread: Spread): BudgetLine {
-      const u = spreadUncertainty(spread);
-      const contribution = half(n, u);
-      return { input, sensitivity: u === 0 ? 0 : contribution / u, contribution };
-    },
-    /** Largest distance of the figure from the straight line through the best estimate, at the ends of the input's reach. */
-    departure(n: number, input: UncertainQuantity): number {
-      const by = Math.hypot(reach(input), input.betweenWafers ? reach(input.betweenWafers) : 0);
-      if (by === 0) return 0;
-      const straight = slope(n, wholeUncertainty(input)) * by;
-      const [up, down] = [moved(n, by), moved(n, -by)];
-      // A side that cannot be computed is as far from a straight line as can be told: by all of it.
-      const off = (figureThere: number | null, expected: number) =>
-        figureThere === null ? Math.abs(straight) : Math.abs(figureThere - expected);
-      return Math.max(off(up, atBest + straight), off(down, atBest - straight));
-    },
-  };
-}
-
-function figure(model: ScalarModel, row: Float64Array): number {
-  const value = model(row);
-  if (!Number.isFinite(value)) throw new EngineInputError("model", "gives no finite number for these inputs");
-  return value;
+function line(probe: Probe, n: number, input: string, spread: Spread): BudgetLine {
+  const u = spreadUncertainty(spread);
+  const contribution = probe.half(n, u);
+  return { input, sensitivity: u === 0 ? 0 : contribution / u, contribution };
 }
 
 function combined(lines: readonly BudgetLine[], matrix: Float64Array | null): number {

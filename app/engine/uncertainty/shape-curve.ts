@@ -1,5 +1,5 @@
 import { criticalLinearCurvature } from "../plate/critical-load.ts";
-import { freeWaferShape, type PlateInput } from "../plate/free-wafer-shape.ts";
+import { reachedWaferShape, type PlateInput } from "../plate/free-wafer-shape.ts";
 import { arcSagitta } from "../stoney/bow.ts";
 
 /** The shape of a free disc that bends alike in both directions, as functions of its curvature by small-deflection theory. */
@@ -19,7 +19,7 @@ const FARTHEST = 60;
  * `freeWaferShape` for sampling: bows of a disc of given radius and material for any curvature (1/m) and thickness (m), read from
  * a curve through it. Without dimensions the shape depends on the load alone, κ R²/(4h), so one curve serves every draw. Within
  * 1e-4 of `freeWaferShape` (measured: 5e-5) up to 60 times the load at which the disc rolls; beyond that it is asked itself.
- * Building it takes some 1200 shapes, so build it once for all steps with the same disc.
+ * A node is solved when it is first asked for, some 1200 in all, so build it once for all steps with the same disc.
  * @throws EngineInputError as `freeWaferShape` does, for the disc
  */
 export function shapeCurve(disc: Omit<PlateInput, "thickness">): ShapeCurve {
@@ -28,17 +28,23 @@ export function shapeCurve(disc: Omit<PlateInput, "thickness">): ShapeCurve {
   const thin = { ...disc, radius: 1, thickness: 1e-9 };
   const scale = 4 * thin.thickness;
   const onset = criticalLinearCurvature(thin) / scale;
-  const at = (load: number) => freeWaferShape({ ...thin, linearCurvature: load * scale });
-  const nodes = Array.from({ length: BEFORE + BEYOND + 1 }, (_, n) => at(loadAt(n) * onset));
-  const major = Float64Array.from(nodes, ({ bowMajor }) => (2 * bowMajor) / scale);
-  const high = Float64Array.from(nodes, ({ warp }) => (2 * warp) / scale);
+  const at = (load: number) => reachedWaferShape({ ...thin, linearCurvature: load * scale });
+  const major = new Float64Array(BEFORE + BEYOND + 1).fill(NaN);
+  const high = major.slice();
+  const solve = (n: number) => {
+    const { bowMajor, warp } = at(loadAt(n) * onset);
+    major[n] = (2 * bowMajor) / scale;
+    high[n] = (2 * warp) / scale;
+  };
   const along = (curve: Float64Array, position: number) => {
     const n = Math.floor(position);
+    if (Number.isNaN(curve[n])) solve(n);
+    if (Number.isNaN(curve[n + 1])) solve(n + 1);
     const below = curve[n] ?? 0;
     return below + (position - n) * ((curve[n + 1] ?? below) - below);
   };
   const asked = (curvature: number, thickness: number) =>
-    freeWaferShape({ ...disc, thickness, linearCurvature: curvature });
+    reachedWaferShape({ ...disc, thickness, linearCurvature: curvature });
   return {
     sagitta(curvature, thickness) {
       const perLoad = (4 * thickness) / (radius * radius);

@@ -1,26 +1,32 @@
-import { DIMENSIONS, type Dimension, type DimensionDefinition, type UnitDefinition } from "./dimensions.ts";
-import { convert } from "./mathjs-unit.ts";
+import type { Dimension, UnitDefinition } from "./dimensions.ts";
+import { FACTORS, ZEROS } from "./table/factors.ts";
 
 /** `value` of `unit` in the SI unit of the dimension. */
 export function toSi(value: number, unit: UnitDefinition, dimension: Dimension): number {
-  const { si }: DimensionDefinition = DIMENSIONS[dimension];
-  if (unit.base === null || si === null) return scaled(value, unit.times);
-  if (dimension === "temperature") return convert(value, unit.base, si);
-  return scaled(value, convert(unit.times, unit.base, si));
+  return scaled(value, factorOf(unit)) + zeroOf(unit, dimension);
 }
 
 /** `value` in SI, in `unit`. */
 export function fromSi(value: number, unit: UnitDefinition, dimension: Dimension): number {
-  const { si }: DimensionDefinition = DIMENSIONS[dimension];
-  if (unit.base === null || si === null) return unscaled(value, unit.times);
-  if (dimension === "temperature") return convert(value, si, unit.base);
-  return unscaled(value, convert(unit.times, unit.base, si));
+  return unscaled(value - zeroOf(unit, dimension), factorOf(unit));
 }
 
 /** A step of `value` SI units in `unit`: as `fromSi`, but a temperature's offset is left out. */
 export function stepFromSi(value: number, unit: UnitDefinition, dimension: Dimension): number {
   if (dimension !== "temperature") return fromSi(value, unit, dimension);
   return value * (fromSi(1, unit, dimension) - fromSi(0, unit, dimension));
+}
+/** How many of the dimension's SI unit it is. */
+function factorOf({ base, times }: UnitDefinition): number {
+  if (base === null) return times;
+  const factor = FACTORS[base];
+  if (factor === undefined) throw new RangeError(`no factor of ${base} in the table of units`);
+  return times * factor;
+}
+
+/** Where the scale of a temperature has its zero, K; a difference has none. */
+function zeroOf({ base }: UnitDefinition, dimension: Dimension): number {
+  return dimension === "temperature" && base !== null ? (ZEROS[base] ?? 0) : 0;
 }
 
 /** Multiplies by a factor; a factor that is one over a whole number divides, which rounds once instead of twice. */

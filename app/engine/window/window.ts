@@ -1,5 +1,5 @@
 import { EngineInputError } from "../errors.ts";
-import { worstOutcome } from "../flow/assess.ts";
+import { worstOutcome } from "../flow/judge.ts";
 import type { FlowInput } from "../flow/model.ts";
 import { requireFinite } from "../inputs.ts";
 import { standingOf } from "../remedy/try-change.ts";

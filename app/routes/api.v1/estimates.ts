@@ -2,7 +2,7 @@ import { actorContext, scopeOf } from "#app/server/contexts.server.ts";
 import { JsonBodyRefused, readJsonBody } from "#app/server/json-body.server.ts";
 import { problemJson } from "#app/server/problem-json.server.ts";
 import { mayOnSite } from "#app/policies/permissions.ts";
-import { EstimateRefused } from "#app/services/estimate-answer.ts";
+import { EstimateRefused } from "#app/lib/estimate-answer.ts";
 import { estimate } from "#app/services/estimates.server.ts";
 import type { Route } from "./+types/estimates";
 

@@ -1,6 +1,7 @@
 import { answerSentences } from "#app/engine/flow/answer.ts";
-import type { AssessedStep, FlowAssessment } from "#app/engine/flow/assess.ts";
+import type { FlowAssessment } from "#app/engine/flow/assess.ts";
 import { bondedFace, bondOn } from "#app/engine/flow/bond.ts";
+import type { AssessedStep } from "#app/engine/flow/judge.ts";
 import type { FlowInput } from "#app/engine/flow/model.ts";
 import { edgesUp, type LyingShape } from "#app/engine/flow/shape.ts";
 import { faceUpLoaded } from "#app/engine/flow/state.ts";

@@ -8,7 +8,8 @@
  */
 import { describe, expect, it } from "vitest";
 import { supportSpans, tightestStep } from "#app/engine/flow/answer.ts";
-import { assessFlow, worstOutcome, type FlowAssessment } from "#app/engine/flow/assess.ts";
+import { assessFlow, type FlowAssessment } from "#app/engine/flow/assess.ts";
+import { worstOutcome } from "#app/engine/flow/judge.ts";
 import { defaultLimits } from "#app/engine/rules/limits.ts";
 import { OUTCOMES } from "#app/engine/vocabulary.ts";
 import { DEMO_FLOWS, demoFlow, type ExpertFinding } from "../../fixtures/demo-flow-input.ts";

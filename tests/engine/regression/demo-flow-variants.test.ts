@@ -4,7 +4,8 @@
  *   sag       highest less lowest place under its own weight, m
  */
 import { describe, expect, it } from "vitest";
-import { assessFlow, worstOutcome } from "#app/engine/flow/assess.ts";
+import { assessFlow } from "#app/engine/flow/assess.ts";
+import { worstOutcome } from "#app/engine/flow/judge.ts";
 import type { FlowInput, StepInput } from "#app/engine/flow/model.ts";
 import { defaultLimits } from "#app/engine/rules/limits.ts";
 import { requiredSupport } from "#app/engine/rules/required-support.ts";

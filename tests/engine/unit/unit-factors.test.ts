@@ -1,4 +1,5 @@
 /* Every unit of the tables against the units package as it comes ready made, with its own fractions: the same size and zero. */
+import { readFileSync } from "node:fs";
 import { unit } from "mathjs";
 import { describe, expect, it } from "vitest";
 import { toSi } from "#app/engine/units/convert.ts";
@@ -8,6 +9,7 @@ import {
   type DimensionDefinition,
   type UnitDefinition,
 } from "#app/engine/units/dimensions.ts";
+import { factorsText } from "#app/engine/units/generator/factors-text.ts";
 import { relative } from "../relative.ts";
 
 const units = (Object.keys(DIMENSIONS) as Dimension[]).flatMap((dimension) => {
@@ -23,5 +25,12 @@ describe("units", () => {
     for (const value of [1, 37.5])
       // A few roundings in double precision.
       expect(relative(size(value, one), unit(value * one.times, base).toNumber(si))).toBeLessThan(1e-15);
+  });
+});
+
+describe("the table of units", () => {
+  it("is what its generator makes", () => {
+    const file = new URL("../../../app/engine/units/table/factors.ts", import.meta.url);
+    expect(readFileSync(file, "utf8")).toBe(factorsText());
   });
 });

@@ -8,7 +8,8 @@ import { stackDraft } from "#app/lib/stack-draft.ts";
 import { panelKey, panelRequests } from "#app/lib/stack-panel.ts";
 import { stackText } from "#app/lib/stack-text.ts";
 import type { EstimateRequest } from "#app/schemas/estimate.ts";
-import { answerEstimate, answerOrNull, EstimateRefused, stackPanel } from "#app/services/estimate-answer.ts";
+import { EstimateRefused } from "#app/lib/estimate-answer.ts";
+import { answerEstimate, answerOrNull, stackPanel } from "#app/services/estimate-answer.ts";
 import { readEstimateRequest } from "#app/services/estimate-request.ts";
 import { CHOICES, TEXT } from "./samples.ts";
 

@@ -1,9 +1,20 @@
+import { packTable, type SmoothTable } from "../smooth-table.ts";
 import { places, POINT_GRID, RAIL_GRID, RATIO_GRID, RING_GRID } from "../table-grid.ts";
 import { edgeRingCurve } from "./edge-ring-curve.ts";
 import { threePointRatios } from "./points-ritz.ts";
 import { railsContact, type RailsSag } from "./rails-contact.ts";
 
 const RATIOS = places(RATIO_GRID);
+
+/** Columns of every table. */
+const COLUMNS = RATIOS.length;
+
+/** Rails are fine to 0.00002 q a⁴/D; ratios of large deflection to some 0.0001. Neither is what rounding shows in. */
+const RAILS_PER_UNIT = 1e7;
+const RATIOS_PER_UNIT = 1e6;
+
+/** Characters of packed text in a line. */
+const WIDTH = 100;
 
 const RAIL_VALUES = [
   "centre",
@@ -17,13 +28,13 @@ const RAIL_VALUES = [
 export function railsTable(): string {
   const rows = places(RAIL_GRID).map((angle) => RATIOS.map((nu) => railsContact(Math.cos(angle), nu)));
   return [
-    "/* Made by `npm run gravity-table` from app/engine/gravity/generator; not to be edited. */",
-    "",
+    ...HEAD,
     "/** Sag on two rails in units of q a⁴/D: for each angle, for each Poisson's ratio, the value. */",
     ...RAIL_VALUES.map((name) =>
       constant(
         `RAILS_${snake(name)}`,
         rows.map((row) => row.map((sag) => sag[name])),
+        RAILS_PER_UNIT,
       ),
     ),
     "",
@@ -37,18 +48,19 @@ export function largeSagTables(): string {
   const ring = RATIOS.map((nu) => edgeRingCurve(nu, loads));
   const points = RATIOS.map((nu) => threePointRatios(nu, pointLoads));
   return [
-    "/* Made by `npm run gravity-table` from app/engine/gravity/generator; not to be edited. */",
-    "",
-    "/** Edge ring: sag over thickness, divided by that of small deflections; for each load, for each Poisson's ratio. */",
+    ...HEAD,
+    "/** Edge ring: logarithm of the sag over that of small deflections; for each load, for each Poisson's ratio. */",
     constant(
-      "RING_RATIOS",
-      loads.map((load, k) => RATIOS.map((nu, n) => over(ring[n]?.[k], ((5 + nu) / (64 * (1 + nu))) * load))),
+      "RING_LOGARITHMS",
+      loads.map((load, k) => RATIOS.map((nu, n) => Math.log(over(ring[n]?.[k], ((5 + nu) / (64 * (1 + nu))) * load)))),
+      RATIOS_PER_UNIT,
     ),
     "",
     "/** Three points at the rim: peak to valley over that of small deflections; for each load, for each Poisson's ratio. */",
     constant(
       "POINT_RATIOS",
       pointLoads.map((_, k) => RATIOS.map((_nu, n) => points[n]?.[k] ?? NaN)),
+      RATIOS_PER_UNIT,
     ),
     "",
   ].join("\n");
@@ -62,8 +74,15 @@ function snake(name: string): string {
   return name.replace(/[A-Z]/g, (letter) => `_${letter}`).toUpperCase();
 }
 
-function constant(name: string, rows: readonly (readonly number[])[]): string {
-  const text = (value: number) => String(Number(value.toPrecision(6)));
-  const lines = rows.map((row) => `  [${row.map(text).join(", ")}],`);
-  return [`export const ${name}: readonly (readonly number[])[] = [`, ...lines, "];"].join("\n");
+const HEAD = [
+  'import { unpackTable } from "../smooth-table.ts";',
+  "",
+  "/* Made by `npm run gravity-table` from app/engine/gravity/generator; not to be edited. */",
+  "",
+];
+
+function constant(name: string, rows: SmoothTable, perUnit: number): string {
+  const lines = packTable(rows, perUnit).match(new RegExp(`.{1,${WIDTH}}`, "g")) ?? [];
+  const text = lines.map((line) => `  "${line}"`).join(" +\n");
+  return `export const ${name} = /* @__PURE__ */ unpackTable(\n${text},\n  ${COLUMNS},\n  ${perUnit},\n);`;
 }

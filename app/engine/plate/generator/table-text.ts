@@ -1,22 +1,14 @@
-import type { ShapeTable } from "../table/shape-table.ts";
+import { packIntegers } from "../../packed-integers.ts";
+import { overBow, type ShapeTable } from "../table/shape-table.ts";
 import type { Errors, ErrorsByClass, OnsetErrors } from "./check.ts";
 
-/** Longest line of a source file. */
-const WIDTH = 120;
+/** Characters of a packed list in a line. */
+const WIDTH = 100;
 
-/** A list of numbers filled into lines. */
+/** A list of integers as packed text, filled into lines. */
 function filled(values: readonly number[], indent: string): string {
-  const lines: string[] = [];
-  let line = "";
-  for (const value of values) {
-    const next = line === "" ? `${value},` : `${line} ${value},`;
-    if (indent.length + next.length > WIDTH) {
-      lines.push(indent + line);
-      line = `${value},`;
-    } else line = next;
-  }
-  lines.push(indent + line);
-  return lines.join("\n");
+  const lines = packIntegers(values).match(new RegExp(`.{1,${WIDTH}}`, "g")) ?? [""];
+  return lines.map((line) => `${indent}"${line}"`).join(" +\n");
 }
 
 function literal(table: ShapeTable, indent: string): string {
@@ -24,12 +16,12 @@ function literal(table: ShapeTable, indent: string): string {
   const inner = `${indent}  `;
   const head = (one: { extent: readonly number[]; quantum: number }) =>
     `${inner}  extent: [${one.extent.join(", ")}],\n${inner}  quantum: ${one.quantum},\n`;
-  const lists = measures.values.map((values) => `${inner}    [\n${filled(values, `${inner}      `)}\n${inner}    ],\n`);
+  const lists = overBow(measures.values).map((values) => `${filled(values, `${inner}    `)},\n`);
   return [
-    `{\n${inner}generator: ${table.generator},\n`,
-    `${inner}energy: {\n${head(energy)}${inner}  values: [\n${filled(energy.values, `${inner}    `)}\n${inner}  ],\n${inner}},\n`,
+    `unpackTable({\n${inner}generator: ${table.generator},\n`,
+    `${inner}energy: {\n${head(energy)}${inner}  values:\n${filled(energy.values, `${inner}    `)},\n${inner}},\n`,
     `${inner}measures: {\n${head(measures)}${inner}  values: [\n${lists.join("")}${inner}  ],\n${inner}},\n`,
-    `${indent}}`,
+    `${indent}})`,
   ].join("");
 }
 
@@ -46,7 +38,7 @@ export function tableText(name: string, about: string, tables: ShapeTable | Reco
         .map(([key, table]) => `  ${key}: ${literal(table, "  ")},\n`)
         .join("")}}`
     : literal(tables as ShapeTable, "");
-  return `import type { ShapeTable } from "./shape-table.ts";
+  return `import { unpackTable, type ShapeTable } from "./shape-table.ts";
 
 /**
  * ${about}
