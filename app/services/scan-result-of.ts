@@ -37,6 +37,8 @@ export function scanResult(values: ScanValues, before: ReadProfile, after: ReadP
     },
   });
   const radius = values.diameter / 2;
+  // With k = 2 this gives the 95 % interval, also where the scatter left few degrees of freedom.
+  const curvatureUncertainty = film.difference.expandedUncertainty / 2;
   const { difference, curvatureChange, pairs } = film;
   const { curled, understatedBy } = smallDeflection({
     before: film.before.curvature,
@@ -52,9 +54,9 @@ export function scanResult(values: ScanValues, before: ReadProfile, after: ReadP
     curvatureBefore: film.before.curvature,
     curvatureAfter: film.after.curvature,
     curvatureChange,
-    curvatureUncertainty: difference.standardUncertainty,
+    curvatureUncertainty,
     bowChange: standardBow(bowFromCurvature({ curvature: curvatureChange, radius })),
-    bowUncertainty: Math.abs(bowFromCurvature({ curvature: difference.standardUncertainty, radius })),
+    bowUncertainty: Math.abs(bowFromCurvature({ curvature: curvatureUncertainty, radius })),
     curled: curled ? rolled(film, radius) : null,
     understatedBy,
     stress: film.stress,

@@ -105,7 +105,7 @@ export function filmStressFromProfiles(i: FilmStressFromProfilesInput): FilmStre
   const film = filmStressFromCurvature({
     ...i,
     curvatureChange,
-    curvatureUncertainty: difference.standardUncertainty,
+    curvatureUncertainty: difference.expandedUncertainty / 2,
   });
   return { curvatureChange, pairs, difference, before, after, ...film };
 }

@@ -19,7 +19,7 @@ export function filmStressFromProfilesWorking(i: FilmStressFromProfilesInput): W
       {
         symbol: "u_κ",
         meaning: "its standard uncertainty from the scatter",
-        value: difference.standardUncertainty,
+        value: difference.expandedUncertainty / 2,
         unit: "1/m",
       },
       { symbol: "n", meaning: "points used", value: difference.used, unit: "1" },
