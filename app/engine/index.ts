@@ -65,7 +65,7 @@ export { fittedHeight, levelHeight } from "./profile/fitted-height.ts";
 export {
   filmStressFromCurvature,
   filmStressFromProfiles,
-  type FilmStressFromProfiles,
+  type FilmStressFromScans,
   type FilmStressFromProfilesInput,
   type FilmStressUncertainties,
   type MonitorWafer,

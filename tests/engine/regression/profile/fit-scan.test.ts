@@ -4,10 +4,10 @@
  *   x  position, z height                                m
  *   c  coefficients of 1, t, t², … with t = x/half-width m
  */
-import { inv, matrix, multiply, qr, transpose, usolve } from "mathjs";
+import { inv, multiply, qr, transpose, usolve } from "mathjs";
 import { describe, expect, it } from "vitest";
 import { fitScan } from "#app/engine/profile/fit-scan.ts";
-import { relative } from "../relative.ts";
+import { relative } from "../../relative.ts";
 
 /** Heights that no formula knows: a repeating pattern of two lengths that share no factor. */
 function waferScan(count: number) {
@@ -17,8 +17,8 @@ function waferScan(count: number) {
 }
 
 function byQr(t: number[], z: number[], degree: number): number[] {
-  const { Q, R } = qr(matrix(t.map((at) => Array.from({ length: degree + 1 }, (_, power) => at ** power))));
-  const [q, r] = [Q.toArray() as number[][], R.toArray() as number[][]];
+  const { Q, R } = qr(t.map((at) => Array.from({ length: degree + 1 }, (_, power) => at ** power)));
+  const [q, r] = [Q as number[][], R as number[][]];
   const right = Array.from({ length: degree + 1 }, (_, k) =>
     q.reduce((sum, row, n) => sum + (row[k] ?? 0) * (z[n] ?? 0), 0),
   );
