@@ -64,7 +64,10 @@ describe("fitAzimuths", () => {
     }));
     const calm = allDirections(read({ x: 0.01, y: 0.01, twist: 0 }, [0, 45, 90, 135], 1e-6));
     const spread = allDirections(
-      readings.map((reading, n) => ({ ...reading, curvature: reading.curvature + [3e-5, -1e-5, -2e-5, 5e-5][n]! })),
+      readings.map((reading, n) => ({
+        ...reading,
+        curvature: reading.curvature + ([3e-5, -1e-5, -2e-5, 5e-5][n] ?? 0),
+      })),
     );
     expect(spread.chiSquare).toBeGreaterThan(10);
     expect(spread.meanUncertainty).toBeGreaterThan(5 * calm.meanUncertainty);
