@@ -11,7 +11,7 @@ const NORMAL_OVER_MEDIAN = 1.4826;
 /** The same over its mean absolute deviation. */
 const NORMAL_OVER_MEAN = 1.2533;
 /** Stretches of the scan whose medians start the fit; all their triples are tried. */
-const STRETCHES = 30;
+const STRETCHES = 20;
 /** Points from which the scatter is taken at most, evenly spread. */
 const SAMPLED = 65536;
 const MOST_ROUNDS = 50;
@@ -25,7 +25,7 @@ type Parabola = readonly [number, number, number];
  * Which points follow one parabola: 1 for those, 0 for spikes, steps and other points farther off than 4.685 times the scatter of
  * the rest. `t` ascends from −1 to 1. Linear time.
  *
- * The start is the parabola through the medians of three of 30 stretches that has the least median of squared deviations
+ * The start is the parabola through the medians of three of 20 stretches that has the least median of squared deviations
  * (Rousseeuw 1984) over all stretches: it stands up to nearly half of them being wrong, at an end too. From there
  * iterated least squares with Tukey's bisquare weights, the scatter by the median absolute deviation.
  * A step is told when fewer than half of the points lie beyond it.
@@ -138,7 +138,14 @@ function leastMedian(t: Float64Array, z: Float64Array): Parabola {
       for (let k = j + 1; k < count; k += 1) {
         const parabola = through(at, height, i, j, k);
         if (!parabola) continue;
-        for (let n = 0; n < count; n += 1) sizes[n] = Math.abs(off(parabola, at[n] ?? 0, height[n] ?? 0));
+        let nearer = 0;
+        for (let n = 0; n < count; n += 1) {
+          const size = Math.abs(off(parabola, at[n] ?? 0, height[n] ?? 0));
+          sizes[n] = size;
+          if (size < least) nearer += 1;
+        }
+        // The median can only be less when half of the deviations are.
+        if (2 * nearer < count) continue;
         const median = medianInPlace(sizes, count);
         if (median < least) {
           least = median;
