@@ -1,4 +1,5 @@
 import type { Equation } from "./equation.ts";
+import { SCANS } from "./scans.ts";
 
 export const METROLOGY = {
   "profile-fit": {
@@ -104,4 +105,5 @@ export const METROLOGY = {
     sources: ["gum-supplement-1-2008", "sampling-layers"],
     caution: "A tolerance that is common to the lot moves all its wafers together and does not spread them.",
   },
+  ...SCANS,
 } as const satisfies Record<string, Equation>;
