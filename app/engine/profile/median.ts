@@ -2,7 +2,7 @@
  * The value that would stand at place `k` if the first `count` of `values` were in order; moves them about. Linear time on
  * average. Source: Hoare 1961 (find), median of three as pivot, from memory.
  */
-export function selectInPlace(values: Float64Array, count: number, k: number): number {
+function selectInPlace(values: Float64Array, count: number, k: number): number {
   let [low, high] = [0, count - 1];
   while (low < high) {
     const pivot = middleOf(values[low] ?? 0, values[(low + high) >> 1] ?? 0, values[high] ?? 0);
@@ -37,9 +37,4 @@ export function medianInPlace(values: Float64Array, count: number): number {
   let lower = Number.NEGATIVE_INFINITY;
   for (let n = 0; n < count >> 1; n += 1) lower = Math.max(lower, values[n] ?? 0);
   return (lower + upper) / 2;
-}
-
-/** Median of a list, which is left as it is. */
-export function medianOf(values: ArrayLike<number>): number {
-  return medianInPlace(Float64Array.from(values), values.length);
 }

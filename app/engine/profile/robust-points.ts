@@ -12,7 +12,7 @@ const NORMAL_OVER_MEDIAN = 1.4826;
 const NORMAL_OVER_MEAN = 1.2533;
 /** Stretches of the scan whose medians start the fit; all their triples are tried. */
 const STRETCHES = 20;
-/** Points from which the scatter is taken at most, evenly spread. */
+/** Points on which the parabola is settled at most, evenly spread; all are judged by it. */
 const SAMPLED = 65536;
 const MOST_ROUNDS = 50;
 /** Rounds in which the scatter is measured anew; then it stays, so that the weights settle. */
@@ -28,11 +28,27 @@ type Parabola = readonly [number, number, number];
  * The start is the parabola through the medians of three of 20 stretches that has the least median of squared deviations
  * (Rousseeuw 1984) over all stretches: it stands up to nearly half of them being wrong, at an end too. From there
  * iterated least squares with Tukey's bisquare weights, the scatter by the median absolute deviation.
- * A step is told when fewer than half of the points lie beyond it.
+ * A step is told when fewer than half of the points lie beyond it. Of a long scan 65,536 to twice as many points, evenly spread, settle
+ * the parabola by which all are judged.
  */
 export function pointsOnParabola(t: Float64Array, z: Float64Array): Uint8Array {
-  const keep = new Uint8Array(t.length).fill(1);
-  const room = new Float64Array(Math.min(t.length, 2 * SAMPLED));
+  const stride = Math.max(1, Math.floor(t.length / SAMPLED));
+  const { parabola, limit } = settled(thinned(t, stride), thinned(z, stride));
+  const keep = new Uint8Array(t.length);
+  for (let n = 0; n < t.length; n += 1) keep[n] = Math.abs(off(parabola, t[n] ?? 0, z[n] ?? 0)) <= limit ? 1 : 0;
+  return keep;
+}
+
+function thinned(values: Float64Array, stride: number): Float64Array {
+  if (stride === 1) return values;
+  const out = new Float64Array(Math.ceil(values.length / stride));
+  for (let n = 0; n < out.length; n += 1) out[n] = values[n * stride] ?? 0;
+  return out;
+}
+
+/** The parabola that most points follow, and how far off a point may lie. */
+function settled(t: Float64Array, z: Float64Array): { parabola: Parabola; limit: number } {
+  const room = new Float64Array(t.length);
   // A perfect parabola leaves rounding only, which is no scatter to judge points by.
   let largest = 0;
   for (let n = 0; n < z.length; n += 1) largest = Math.max(largest, Math.abs(z[n] ?? 0));
@@ -46,24 +62,21 @@ export function pointsOnParabola(t: Float64Array, z: Float64Array): Uint8Array {
     if (next !== null) parabola = next;
     if (round >= SCALE_ROUNDS && moved <= 1e-9 * limit) break;
   }
-  for (let n = 0; n < t.length; n += 1) keep[n] = Math.abs(off(parabola, t[n] ?? 0, z[n] ?? 0)) <= limit ? 1 : 0;
-  return keep;
+  return { parabola, limit };
 }
 
 function off([c0, c1, c2]: Parabola, t: number, z: number): number {
   return z - (c0 + (c1 + c2 * t) * t);
 }
 
-/** Standard deviation of the scatter about a parabola, by the median absolute deviation of points spread evenly. */
+/** Standard deviation of the scatter about a parabola, by the median absolute deviation. */
 function scatterAbout(parabola: Parabola, t: Float64Array, z: Float64Array, room: Float64Array): number {
-  const stride = Math.max(1, Math.floor(t.length / SAMPLED));
-  let count = 0;
+  const count = t.length;
   let sum = 0;
-  for (let n = 0; n < t.length; n += stride) {
+  for (let n = 0; n < count; n += 1) {
     const size = Math.abs(off(parabola, t[n] ?? 0, z[n] ?? 0));
-    room[count] = size;
+    room[n] = size;
     sum += size;
-    count += 1;
   }
   const median = medianInPlace(room, count);
   // Heights in coarse steps may have more than half of the points exactly on the parabola.
