@@ -65,12 +65,13 @@ export { fittedHeight, levelHeight } from "./profile/fitted-height.ts";
 export {
   filmStressFromCurvature,
   filmStressFromProfiles,
-  type FilmStressFromProfiles,
+  filmStressFromScans,
   type FilmStressFromProfilesInput,
+  type FilmStressFromScans,
+  type FilmStressFromScansInput,
   type FilmStressUncertainties,
   type MonitorWafer,
 } from "./profile/film-stress.ts";
-export { filmStressFromProfilesWorking } from "./profile/working.ts";
 export { combineUncertainty, type CombinedUncertainty, type UncertainInput } from "./uncertainty/combine.ts";
 
 // Stack estimate
@@ -238,3 +239,93 @@ export {
 } from "./remedy/find-remedies.ts";
 export { processWindow, type ProcessWindow, type WindowAxis, type WindowPoint } from "./window/window.ts";
 export { contours, type ContourPoint } from "./window/contours.ts";
+
+// What scans say: fit, pairs, azimuths, surface, stress, budgets, mistakes, charts
+export { type AscendingColumns, columnsOf, MOST_POINTS, type ScanColumns } from "./profile/columns.ts";
+export { fitScan, NOT_SPHERICAL, type ShapeTest } from "./profile/fit-scan.ts";
+export type { Scatter } from "./profile/scatter.ts";
+export type { RejectedRun, ScanGap } from "./profile/scan-features.ts";
+export { BISQUARE } from "./profile/robust-points.ts";
+export { interpolationError, matchScans, type MatchedScans } from "./profile/match-scans.ts";
+export {
+  angleBetween,
+  faceUpScan,
+  lineAzimuth,
+  pairScans,
+  type PairedScans,
+  type ScanLie,
+  type ScanPlace,
+} from "./profile/orient-scan.ts";
+export {
+  curvatureAlong,
+  fitAzimuths,
+  ONE_LINE,
+  type AzimuthFit,
+  type AzimuthReading,
+  type CurvatureWord,
+  type PlaneCurvature,
+} from "./profile/azimuths.ts";
+export { azimuthsWorking, filmStressFromProfilesWorking, fitScanWorking } from "./profile/working.ts";
+export { fitSurface, type SiteColumns, type SurfaceInput } from "./profile/map/fit-surface.ts";
+export {
+  combinedSurface,
+  secondOrderCurvature,
+  surfaceEvaluator,
+  surfaceHeight,
+  type Surface,
+} from "./profile/map/surface.ts";
+export type { ZernikeIndex } from "./profile/map/zernike.ts";
+export {
+  extremes,
+  shapeFigures,
+  type GravityHandling,
+  type ShapeFigure,
+  type ShapeFigures,
+  type ShapeFiguresInput,
+} from "./profile/map/shape-figures.ts";
+export { surfaceContours, type SurfaceContours } from "./profile/map/surface-contours.ts";
+export { thicknessFigures, type ThicknessFigures } from "./profile/map/thickness-sites.ts";
+export { shapeFiguresWorkings, surfaceWorking } from "./profile/map/working.ts";
+export { smallDeflection, type MonitorShapeInput, type SmallDeflection } from "./profile/small-deflection.ts";
+export { stressBothWays, WORTH_BOTH, type FullModelInput, type StressBothWays } from "./profile/stress/full-model.ts";
+export {
+  directionalFilmStress,
+  type DirectionalStress,
+  type DirectionalStressInput,
+} from "./profile/stress/directional-stress.ts";
+export { gravityRemark, type GravityRemark } from "./profile/stress/gravity-remark.ts";
+export {
+  stressBudget,
+  type StatedUncertainty,
+  type StressBudget,
+  type StressBudgetInput,
+  type StressBudgetLine,
+  type ToolUncertainty,
+} from "./profile/stress/stress-budget.ts";
+export { directionalStressWorking, fullStressWorking, stressBudgetWorking } from "./profile/stress/working.ts";
+export {
+  referenceCheck,
+  repeatabilityStudy,
+  type ReferenceCheck,
+  type RepeatabilityStudy,
+} from "./profile/tool/repeatability.ts";
+export { repeatabilityWorking } from "./profile/tool/working.ts";
+export { findMistakes, judged as judgeMistake, MISTAKES } from "./profile/mistakes/find-mistakes.ts";
+export type { Mistake, MistakeFinding, MistakeState } from "./profile/mistakes/mistake.ts";
+export type { CalendarDay, CheckedScan, Estimate, ScanChecks } from "./profile/mistakes/scan-checks.ts";
+export {
+  controlChart,
+  type ChartRule,
+  type ChartSignal,
+  type ChartValue,
+  type ControlChart,
+  type ControlLimits,
+} from "./profile/lot-figures/control-chart.ts";
+export { acceptedValue, type AcceptedReading, type AcceptedValue } from "./profile/lot-figures/accepted-value.ts";
+export {
+  predictedAgainstMeasured,
+  type Parity,
+  type ParityPoint,
+} from "./profile/lot-figures/predicted-against-measured.ts";
+export { acceptedValueWorking, controlLimitsWorking, parityWorking } from "./profile/lot-figures/working.ts";
+export { studentFactor } from "./uncertainty/student.ts";

@@ -1,4 +1,5 @@
 import { memory, type Source } from "./sources/source.ts";
+import { METROLOGY_SOURCES } from "./sources/metrology.ts";
 import { STATISTICS } from "./sources/statistics.ts";
 
 export type { Source, SourceBasis } from "./sources/source.ts";
@@ -328,6 +329,7 @@ export const SOURCES = {
     basis: "own derivation",
   },
   ...STATISTICS,
+  ...METROLOGY_SOURCES,
   "common-practice": {
     author: "the trade",
     title: "Common practice in wafer handling",

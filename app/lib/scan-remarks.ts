@@ -120,5 +120,5 @@ function shortScan({ diameter }: ScanParameters, { from, to }: ScanResult): Scan
 function leftOut({ rejected, rejectedAt }: ScanResult): string {
   const places = rejectedAt.map((x) => formatQuantity(x, "length", { unit: "mm", decimals: 1 }).replace(/\s?mm$/, ""));
   const more = rejected > rejectedAt.length ? " and elsewhere" : "";
-  return `The fit left out ${rejected === 1 ? "1 point" : `${rejected} points`} more than 4 times the scatter off the parabola, at ${places.join(", ")}\u00A0mm${more}.`;
+  return `The fit left out ${rejected === 1 ? "1 point" : `${rejected} points`} more than 4.7 times the scatter off the parabola, at ${places.join(", ")}\u00A0mm${more}.`;
 }

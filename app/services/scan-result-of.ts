@@ -1,4 +1,4 @@
-import { filmStressFromProfiles, type FilmStressFromProfiles } from "#app/engine/profile/film-stress.ts";
+import { filmStressFromProfiles, type FilmStressFromScans } from "#app/engine/profile/film-stress.ts";
 import { fittedHeight, levelHeight } from "#app/engine/profile/fitted-height.ts";
 import { smallDeflection } from "#app/engine/profile/small-deflection.ts";
 import { siliconBiaxialModulus } from "#app/engine/silicon/biaxial-modulus.ts";
@@ -37,7 +37,9 @@ export function scanResult(values: ScanValues, before: ReadProfile, after: ReadP
     },
   });
   const radius = values.diameter / 2;
-  const { difference, curvatureChange, pairs } = film;
+  // With k = 2 this gives the 95 % interval, also where the scatter left few degrees of freedom.
+  const curvatureUncertainty = film.difference.expandedUncertainty / 2;
+  const { difference, curvatureChange, matched } = film;
   const { curled, understatedBy } = smallDeflection({
     before: film.before.curvature,
     after: film.after.curvature,
@@ -45,16 +47,16 @@ export function scanResult(values: ScanValues, before: ReadProfile, after: ReadP
     thickness: values.siliconThickness,
     orientation: values.orientation,
   });
-  const [from, to] = [pairs[0]?.x ?? 0, pairs.at(-1)?.x ?? 0];
+  const [from, to] = [matched.x[0] ?? 0, matched.x.at(-1) ?? 0];
   const middle = (from + to) / 2;
   return {
     biaxialModulus,
     curvatureBefore: film.before.curvature,
     curvatureAfter: film.after.curvature,
     curvatureChange,
-    curvatureUncertainty: difference.standardUncertainty,
+    curvatureUncertainty,
     bowChange: standardBow(bowFromCurvature({ curvature: curvatureChange, radius })),
-    bowUncertainty: Math.abs(bowFromCurvature({ curvature: difference.standardUncertainty, radius })),
+    bowUncertainty: Math.abs(bowFromCurvature({ curvature: curvatureUncertainty, radius })),
     curled: curled ? rolled(film, radius) : null,
     understatedBy,
     stress: film.stress,
@@ -69,7 +71,7 @@ export function scanResult(values: ScanValues, before: ReadProfile, after: ReadP
     rejected: difference.rejected.length,
     rejectedAt: difference.rejected
       .slice(0, SHOWN_POSITIONS)
-      .flatMap((n) => pairs[n]?.x ?? [])
+      .flatMap((n) => matched.x[n] ?? [])
       .map((x) => x - middle),
     before: before.reading,
     after: after.reading,
@@ -78,7 +80,7 @@ export function scanResult(values: ScanValues, before: ReadProfile, after: ReadP
 }
 
 /** A wafer that has rolled is told by the radius of its roll and by how far its edges lift, never by a bow. */
-function rolled(film: FilmStressFromProfiles, radius: number): ScanResult["curled"] {
+function rolled(film: FilmStressFromScans, radius: number): ScanResult["curled"] {
   const curvature = Math.max(Math.abs(film.before.curvature), Math.abs(film.after.curvature));
   return { rollRadius: 1 / curvature, edgeLift: bowFromCurvature({ curvature, radius, exact: true }) };
 }
@@ -99,15 +101,17 @@ function contribution(
 }
 
 /** Both scans, levelled, and their difference with its parabola, thinned for drawing. */
-function drawnCurve({ pairs, before, after, difference }: FilmStressFromProfiles, middle: number): ScanResult["curve"] {
-  const stride = Math.max(1, Math.ceil(pairs.length / DRAWN_POINTS));
-  return pairs
-    .filter((_, index) => index % stride === 0)
-    .map((pair) => ({
-      x: pair.x - middle,
-      before: pair.before - levelHeight(before, pair.x),
-      after: pair.after - levelHeight(after, pair.x),
-      difference: pair.after - pair.before - levelHeight(difference, pair.x),
-      fitted: fittedHeight(difference, pair.x) - levelHeight(difference, pair.x),
-    }));
+function drawnCurve({ matched, before, after, difference }: FilmStressFromScans, middle: number): ScanResult["curve"] {
+  const stride = Math.max(1, Math.ceil(matched.x.length / DRAWN_POINTS));
+  return Array.from({ length: Math.ceil(matched.x.length / stride) }, (_, shown) => {
+    const n = shown * stride;
+    const [x, pre, post] = [matched.x[n] ?? 0, matched.before[n] ?? 0, matched.after[n] ?? 0];
+    return {
+      x: x - middle,
+      before: pre - levelHeight(before, x),
+      after: post - levelHeight(after, x),
+      difference: post - pre - levelHeight(difference, x),
+      fitted: fittedHeight(difference, x) - levelHeight(difference, x),
+    };
+  });
 }

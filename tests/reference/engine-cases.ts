@@ -12,6 +12,7 @@ import {
   type DirectionalLayer,
   type Layer,
 } from "#app/engine/index.ts";
+import { solveScan, solveSurface, type ScanCase, type SurfaceCase } from "./scan-cases.ts";
 
 /** Layers as cases.json has them: a repeated group stands for its layers, over and over. */
 type Written = DirectionalLayer | { times: number; of: DirectionalLayer[] };
@@ -30,6 +31,8 @@ interface Cases {
   freeWafers: Parameters<typeof freeWaferShape>[0][];
   onsets: Parameters<typeof criticalLinearCurvature>[0][];
   pins: (Parameters<typeof gravitySag>[0] & { count: number; supportRadius: number })[];
+  scans: ScanCase[];
+  surfaces: SurfaceCase[];
 }
 
 function expand(layers: Written[]): DirectionalLayer[] {
@@ -71,6 +74,8 @@ const answers = {
   layeredDiscs: cases.layeredDiscs.map(solveStack),
   freeWafers: cases.freeWafers.map((wafer) => freeWaferShape(wafer)),
   onsets: cases.onsets.map((wafer) => criticalLinearCurvature(wafer)),
+  scans: cases.scans.map(solveScan),
+  surfaces: cases.surfaces.map(solveSurface),
   pins: cases.pins.map(({ count, supportRadius, ...wafer }) =>
     gravitySag({ ...wafer, support: { kind: "points", count, radius: supportRadius } }),
   ),

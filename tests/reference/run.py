@@ -16,6 +16,7 @@ import numpy as np
 
 import discs
 import laminates
+import scans
 from materials import Layer, thermal_strain
 from table import Row, compare, print_rows
 
@@ -118,6 +119,8 @@ def main(engine_file: str, folder: str, report_file: str) -> None:
     engine = json.loads(Path(engine_file).read_text("utf-8"))
     rows = [row for pair in zip(cases["laminates"], engine["laminates"], strict=True) for row in laminate_rows(*pair)]
     rows += [expansion_row(*pair) for pair in zip(cases["expansion"], engine["expansion"], strict=True)]
+    rows += [row for pair in zip(cases["scans"], engine["scans"], strict=True) for row in scans.scan_rows(*pair)]
+    rows += [row for pair in zip(cases["surfaces"], engine["surfaces"], strict=True) for row in scans.surface_rows(*pair)]
     failures = 0
     kinds: list[tuple[str, Callable[..., list[Row]]]] = [
         ("onsets", onset_rows),

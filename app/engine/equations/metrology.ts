@@ -1,4 +1,5 @@
 import type { Equation } from "./equation.ts";
+import { SCANS } from "./scans.ts";
 
 export const METROLOGY = {
   "profile-fit": {
@@ -11,9 +12,20 @@ export const METROLOGY = {
       { symbol: "c_1", meaning: "tilt at the middle", unit: "1" },
       { symbol: "c_2", meaning: "half the curvature of the parabola", unit: "1/m" },
     ],
-    range: "Edge left out; a scan steeper than 0.03 is fitted by a circle. Scatter independent from point to point.",
-    sources: ["gum-2008", "common-practice"],
-    caution: "A fourth-order share beyond 5 % says that the shape is not spherical.",
+    range:
+      "Edge left out; a scan steeper than 0.03 is fitted by a circle. Spikes and steps are told by bisquare weights (4.685 times the scatter) and left out. Scatter independent from point to point, or with a memory short against the scan.",
+    sources: [
+      "gum-2008",
+      "forsythe-1957",
+      "beaton-tukey-1974",
+      "holland-welsch-1977",
+      "rousseeuw-1984",
+      "rousseeuw-leroy-1987",
+      "muller-2007",
+      "scan-scatter",
+      "common-practice",
+    ],
+    caution: "A fourth-order share beyond 5 % that is no chance says that the shape is not spherical.",
   },
   "film-stress-from-profiles": {
     title: "Film stress from a scan before and after",
@@ -93,4 +105,5 @@ export const METROLOGY = {
     sources: ["gum-supplement-1-2008", "sampling-layers"],
     caution: "A tolerance that is common to the lot moves all its wafers together and does not spread them.",
   },
+  ...SCANS,
 } as const satisfies Record<string, Equation>;

@@ -1,8 +1,9 @@
 import { requireModulus, requireThickness, requireWithin } from "../inputs.ts";
 import { stoneyStress } from "../stoney/stoney.ts";
 import { combineUncertainty, type CombinedUncertainty } from "../uncertainty/combine.ts";
-import { commonPoints, type ScanPair } from "./common-points.ts";
-import { fitProfile, type ProfileFit } from "./fit-profile.ts";
+import { columnsOf, type ScanColumns } from "./columns.ts";
+import { fitScan, type ProfileFit } from "./fit-scan.ts";
+import { interpolationError, matchScans, type MatchedScans } from "./match-scans.ts";
 import type { ProfilePoint } from "./points.ts";
 
 /** Standard uncertainties of the inputs that are not scanned, in their own units. Default 0 each. */
@@ -52,23 +53,31 @@ export function filmStressFromCurvature(
   return { stress, ...combined };
 }
 
-export interface FilmStressFromProfilesInput extends MonitorWafer {
+export interface FilmStressFromScansInput extends MonitorWafer {
   /** Scan before the film, on the same azimuth and supports as the one after it. */
-  pre: readonly ProfilePoint[];
-  post: readonly ProfilePoint[];
+  pre: ScanColumns;
+  post: ScanColumns;
   /** m, from either end of the range that both scans cover. */
   edgeExclusion: number;
   robust?: boolean;
 }
 
-export interface FilmStressFromProfiles extends CombinedUncertainty {
+/** The same with the scans as lists of points. */
+export interface FilmStressFromProfilesInput extends Omit<FilmStressFromScansInput, "pre" | "post"> {
+  pre: readonly ProfilePoint[];
+  post: readonly ProfilePoint[];
+}
+
+export interface FilmStressFromScans extends CombinedUncertainty {
   /** 1/m, positive towards a bowl seen from the film's side. */
   curvatureChange: number;
   /** Pa, tension positive. */
   stress: number;
   /** Both scans at the positions of the first one, within the range that both cover. */
-  pairs: ScanPair[];
-  /** Fit of the difference of the two scans. Its `rejected` counts along `pairs`. */
+  matched: MatchedScans;
+  /** Most that the interpolation may be off in height, m. */
+  interpolationError: number;
+  /** Fit of the difference of the two scans. Its `rejected` counts along `matched`. */
   difference: ProfileFit;
   /** Fit of each scan on the points that the difference kept. */
   before: ProfileFit;
@@ -76,38 +85,45 @@ export interface FilmStressFromProfiles extends CombinedUncertainty {
 }
 
 /**
- * Stress of a film from a scan before and one after it. The scan before is taken from the one after point by point, the latter
- * interpolated to the positions of the former within the range that both cover, so the wafer's own shape and most of gravity
- * drop out. Stoney's relation then gives the stress.
+ * Stress of a film from a scan before and one after it: post less pre. The scan before is taken from the one after point by point,
+ * the latter interpolated to the positions of the former within the range that both cover (`matchScans`), so the wafer's own shape
+ * and most of gravity drop out. Both are given device side up, x along the same azimuth, z upwards (`faceUpScan` turns others).
+ * Stoney's relation then gives the stress. The uncertainty has half of the fit's expanded uncertainty in it.
  *
- * Refuses, with `EngineInputError`: scans that do not overlap, fewer than 7 positions left, values that are not finite.
+ * @throws EngineInputError for scans that do not overlap, fewer than 7 positions left, values that are not finite
  */
-export function filmStressFromProfiles(i: FilmStressFromProfilesInput): FilmStressFromProfiles {
+export function filmStressFromScans(i: FilmStressFromScansInput): FilmStressFromScans {
   checkMonitor(i);
-  const pairs = commonPoints(i.pre, i.post);
-  const difference = fitProfile(
-    pairs.map(({ x, before, after }) => ({ x, z: after - before })),
-    { edgeExclusion: i.edgeExclusion, robust: i.robust },
-  );
-  const rejected = new Set(difference.rejected);
-  const kept = pairs.filter((_, n) => !rejected.has(n));
-  const before = fitProfile(
-    kept.map(({ x, before: z }) => ({ x, z })),
-    { edgeExclusion: i.edgeExclusion },
-  );
-  const after = fitProfile(
-    kept.map(({ x, after: z }) => ({ x, z })),
-    { edgeExclusion: i.edgeExclusion },
-  );
+  const matched = matchScans(i.pre, i.post);
+  const change = Float64Array.from(matched.after, (after, n) => after - (matched.before[n] ?? 0));
+  const difference = fitScan({ x: matched.x, z: change }, i);
+  const kept = without(matched, difference.rejected);
+  const alone = { edgeExclusion: i.edgeExclusion };
+  const before = fitScan({ x: kept.x, z: kept.before }, alone);
+  const after = fitScan({ x: kept.x, z: kept.after }, alone);
   // On steep scans curvatures do not subtract like heights, so each scan's own fit counts.
   const steep = before.steep || after.steep;
   const curvatureChange = steep ? after.curvature - before.curvature : difference.curvature;
   const film = filmStressFromCurvature({
     ...i,
     curvatureChange,
-    curvatureUncertainty: difference.standardUncertainty,
+    curvatureUncertainty: difference.expandedUncertainty / 2,
   });
-  return { curvatureChange, pairs, difference, before, after, ...film };
+  const missed = interpolationError(matched.widestSpacing, after.curvature);
+  return { curvatureChange, matched, interpolationError: missed, difference, before, after, ...film };
+}
+
+/** `filmStressFromScans` of two lists of points. */
+export function filmStressFromProfiles(i: FilmStressFromProfilesInput): FilmStressFromScans {
+  return filmStressFromScans({ ...i, pre: columnsOf(i.pre), post: columnsOf(i.post) });
+}
+
+function without(matched: MatchedScans, rejected: readonly number[]): MatchedScans {
+  if (rejected.length === 0) return matched;
+  const keep = new Uint8Array(matched.x.length).fill(1);
+  for (const n of rejected) keep[n] = 0;
+  const kept = (values: Float64Array) => values.filter((_, n) => keep[n] === 1);
+  return { ...matched, x: kept(matched.x), before: kept(matched.before), after: kept(matched.after) };
 }
 
 function checkMonitor(i: MonitorWafer): void {

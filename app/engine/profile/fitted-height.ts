@@ -1,4 +1,5 @@
-import { beyondParabola, type ProfileFit } from "./fit-profile.ts";
+import { beyondParabola } from "./circle.ts";
+import type { ProfileFit } from "./fit-scan.ts";
 
 /** Height of the fitted curve at a position, m: the parabola, or the circle where the scan was steep. */
 export function fittedHeight(fit: ProfileFit, x: number): number {

@@ -1,8 +1,8 @@
 import { requireCurvature } from "../inputs.ts";
-import { criticalLinearCurvature } from "../plate/critical-load.ts";
-import { freeWaferShape, type PlateInput } from "../plate/free-wafer-shape.ts";
+import type { PlateInput } from "../plate/free-wafer-shape.ts";
 import type { Orientation } from "../silicon/orientation.ts";
 import { siliconPlateConstants } from "../silicon/plane-constants.ts";
+import { linearCurvatureOf } from "./stress/linear-curvature.ts";
 
 export interface MonitorShapeInput {
   /** Curvature of the parabola through the scan before and after the film, 1/m. */
@@ -25,9 +25,6 @@ export interface SmallDeflection {
   curled: boolean;
 }
 
-/** Halvings of the range in which the small-deflection curvature is sought: more than a double's digits need no more. */
-const HALVINGS = 60;
-
 /**
  * How far a scanned monitor is from the small deflections that Stoney's relation assumes, the wafer being free and the film
  * uniform. Valid for slopes up to the onset of rolling; gravity left out.
@@ -41,26 +38,9 @@ export function smallDeflection(i: MonitorShapeInput): SmallDeflection {
     ...siliconPlateConstants(i.orientation),
     crystal: i.orientation,
   };
-  const onset = criticalLinearCurvature(plate) * (1 - 1e-9);
   const [before, after] = [requireCurvature("before", i.before), requireCurvature("after", i.after)];
-  const largest = scanned(plate, onset);
-  if (Math.max(Math.abs(before), Math.abs(after)) >= largest) return { understatedBy: null, curled: true };
+  const [linearBefore, linearAfter] = [linearCurvatureOf(plate, before), linearCurvatureOf(plate, after)];
+  if (linearBefore === null || linearAfter === null) return { understatedBy: null, curled: true };
   if (before === after) return { understatedBy: 0, curled: false };
-  const linear = (curvature: number) => Math.sign(curvature) * linearFor(plate, Math.abs(curvature), onset);
-  return { understatedBy: (linear(after) - linear(before)) / (after - before) - 1, curled: false };
-}
-
-/** Curvature that a scan of the free wafer shows under a small-deflection curvature, 1/m. */
-const scanned = (plate: PlateInput, linearCurvature: number) =>
-  freeWaferShape({ ...plate, linearCurvature }).parabolaCurvatureMajor;
-
-/** The small-deflection curvature under which a scan shows `curvature`; what is shown grows with it up to the onset. */
-function linearFor(plate: PlateInput, curvature: number, onset: number): number {
-  let [low, high] = [curvature, onset];
-  for (let n = 0; n < HALVINGS; n += 1) {
-    const middle = (low + high) / 2;
-    if (scanned(plate, middle) < curvature) low = middle;
-    else high = middle;
-  }
-  return (low + high) / 2;
+  return { understatedBy: (linearAfter - linearBefore) / (after - before) - 1, curled: false };
 }
