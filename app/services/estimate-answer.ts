@@ -18,9 +18,6 @@ export function answerEstimate(request: EstimateRequest, limits: SiteLimits): Es
   }
 }
 
-/** The angle of an axis, which has no head, above −π/2 and up to π/2. */
-const axisOf = (angle: number) => angle - Math.PI * Math.ceil(angle / Math.PI - 0.5);
-
 /** The answer where nobody could do anything about a refusal, as in a list: null then. */
 export function answerOrNull(request: EstimateRequest, limits: SiteLimits): EstimateAnswer | null {
   try {

@@ -1,4 +1,3 @@
-import type { PlaneTensor } from "../directional/plane-stiffness.ts";
 import { EngineInputError } from "../errors.ts";
 import type { Measured } from "../measured.ts";
 import type { Orientation } from "../silicon/orientation.ts";
@@ -266,10 +265,6 @@ function sameBonds(a: readonly BondState[], b: readonly BondState[]): boolean {
       return other !== undefined && sameBond(bond, other);
     })
   );
-}
-
-function sameTensor(a: PlaneTensor | undefined, b: PlaneTensor | undefined): boolean {
-  return a?.x === b?.x && a?.y === b?.y && a?.xy === b?.xy;
 }
 
 function sameIncoming(a: Incoming | null, b: Incoming | null): boolean {

@@ -118,7 +118,12 @@ function against(
     {
       remedy: `Cover them thicker, at least ${micrometres(Math.max(height / limits.coverShare.value, height + coverLeftClear.value))}, or make them lower.`,
       figures: [
-        { label: "Share of the cover that they take", value: ratio, unit: "1", working: workings?.bumpCover(input) ?? null },
+        {
+          label: "Share of the cover that they take",
+          value: ratio,
+          unit: "1",
+          working: workings?.bumpCover(input) ?? null,
+        },
         { label: "Left over them", value: left, unit: "m" },
       ],
       limit: siteLimit(limits, outcomeRank(byLeft) > outcomeRank(byShare) ? "coverLeft" : "coverShare"),
