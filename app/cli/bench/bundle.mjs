@@ -1,8 +1,8 @@
-import { fileURLToPath } from "node:url";
 import { gzipSync } from "node:zlib";
 import { build } from "vite";
 
-const root = fileURLToPath(new URL("../../../", import.meta.url));
+/** `run.mjs` runs the bench, itself bundled, from there. */
+const root = `${process.cwd()}/`;
 
 /** What pages need to compute while somebody types, by module of the engine. */
 const UNITS = {

@@ -1,5 +1,4 @@
 import { spawnSync } from "node:child_process";
-import { fileURLToPath } from "node:url";
 
 export const python = "/usr/bin/python3";
 const installer = "/usr/bin/apt-get";
@@ -36,7 +35,7 @@ export function needNumpy() {
  *   seconds?: number, mean?: number, high?: number, errorOfMean?: number, errorOfHigh?: number }}
  */
 export function numpyLaminate(given) {
-  const program = fileURLToPath(new URL("laminate.py", import.meta.url));
+  const program = `${process.cwd()}/app/cli/bench/laminate.py`;
   const run = spawnSync(python, [program], {
     input: JSON.stringify(given),
     encoding: "utf8",

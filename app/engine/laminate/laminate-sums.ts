@@ -3,7 +3,9 @@
  * added up, for a single laminate as for the draws of sampling.
  *
  * It works in memory of its own and of fixed size, which V8 checks and addresses once, when it compiles: over arrays that are
- * handed in, the same loop takes half as long again (measured). The local names in the loop are what lets V8 do so.
+ * handed in, the same loop takes half as long again (measured). V8 does so for what a function made once finds as constants around
+ * it, which is why it is made by another (a bundler turns the constants of a module into variables), and reads them by names of
+ * its own.
  */
 
 /** Stacks that are bent together at most: few enough that their layers stay in the fastest memory. */
@@ -15,25 +17,83 @@ export const MOST_LAYERS = 4096;
 /** Numbers that the layers of all stacks may take together, four for each layer. */
 const ROOM = 32768;
 
-const values = /* @__PURE__ */ new Float64Array(ROOM);
-const factors = /* @__PURE__ */ new Float64Array(MOST_LAYERS);
+function makeKernel() {
+  const values = new Float64Array(ROOM);
+  const factors = new Float64Array(MOST_LAYERS);
+  // Of each stack: the sum of s; twice that of s z; 4 A times the bending stiffness; the sum of f; the curvature.
+  const stretching = new Float64Array(MOST_STACKS);
+  const firstMoment = new Float64Array(MOST_STACKS);
+  const rigidity = new Float64Array(MOST_STACKS);
+  const force = new Float64Array(MOST_STACKS);
+  const curvature = new Float64Array(MOST_STACKS);
 
-/** Of each stack: the sum of s; twice that of s z; 4 A times the bending stiffness; the sum of f; the curvature. */
-const stretching = /* @__PURE__ */ new Float64Array(MOST_STACKS);
-const firstMoment = /* @__PURE__ */ new Float64Array(MOST_STACKS);
-const rigidity = /* @__PURE__ */ new Float64Array(MOST_STACKS);
-const force = /* @__PURE__ */ new Float64Array(MOST_STACKS);
-const curvature = /* @__PURE__ */ new Float64Array(MOST_STACKS);
+  function bendStacks(
+    stacks: number,
+    count: number,
+    bottom: number,
+    stressAt = 2 * count,
+    stressStep = 3 * count,
+  ): void {
+    const x = values;
+    const k = factors;
+    const sumOfStiffness = stretching;
+    const sumOfMoments = firstMoment;
+    const stiff = rigidity;
+    const sumOfForces = force;
+    const bent = curvature;
+    let i = 0;
+    let l = stressAt;
+    for (let stack = 0; stack < stacks; stack += 1) {
+      let top = bottom;
+      let a = 0;
+      let b = 0;
+      let d = 0;
+      let f = 0;
+      let m = 0;
+      let j = (i + count) | 0;
+      const end = j;
+      for (let n = 0; i < end; n = (n + 1) | 0) {
+        const height = x[i] ?? 0;
+        const below = top;
+        top = below + height;
+        const twice = below + top;
+        const stiffness = (k[n] ?? 0) * (x[j] ?? 0) * height;
+        const pull = (x[l] ?? 0) * height;
+        a += stiffness;
+        b += stiffness * twice;
+        d += stiffness * (twice * twice - below * top);
+        f += pull;
+        m += pull * twice;
+        i = (i + 1) | 0;
+        j = (j + 1) | 0;
+        l = (l + 1) | 0;
+      }
+      i = (j + count) | 0;
+      l = (l + stressStep - count) | 0;
+      // Here b, m and d are 2 B, 2 M and 3 D.
+      const rigid = d * a * (4 / 3) - b * b;
+      sumOfStiffness[stack] = a;
+      sumOfMoments[stack] = b;
+      stiff[stack] = rigid;
+      sumOfForces[stack] = f;
+      bent[stack] = (2 * (m * a - f * b)) / rigid;
+    }
+  }
+
+  return { values, factors, stretching, firstMoment, rigidity, force, curvature, bendStacks };
+}
+
+const kernel = /* @__PURE__ */ makeKernel();
 
 /**
  * What `bendStacks` reads: stack after stack, each with the thickness of its layers from the bottom up (m), then their moduli
  * (Pa), then their stresses while held at the reference strain (Pa, tension positive; over the whole area where a layer covers a
  * part of it). Whoever bends anything fills it anew, so it is to be filled and used in one go.
  */
-export const LAYER_VALUES = values;
+export const LAYER_VALUES = kernel.values;
 
 /** By what the modulus of each layer is multiplied, the same in all stacks: times the thickness it is the stiffness of the layer. */
-export const MODULUS_FACTORS = factors;
+export const MODULUS_FACTORS = kernel.factors;
 
 /** How many stacks of so many layers `LAYER_VALUES` has room for, with their stresses a second time. */
 export function stacksThatFit(layers: number): number {
@@ -50,58 +110,9 @@ export function stacksThatFit(layers: number): number {
  * the top is concave. Stresses are read from the place `stressAt` of `LAYER_VALUES` on, `stressStep` places from stack to stack;
  * by default where they stand in the stacks. Nothing is checked and nothing allocated: a stack without stiffness gives no number.
  */
-export function bendStacks(
-  stacks: number,
-  count: number,
-  bottom: number,
-  stressAt = 2 * count,
-  stressStep = 3 * count,
-): void {
-  const x = values;
-  const k = factors;
-  const sumOfStiffness = stretching;
-  const sumOfMoments = firstMoment;
-  const stiff = rigidity;
-  const sumOfForces = force;
-  const bent = curvature;
-  let i = 0;
-  let l = stressAt;
-  for (let stack = 0; stack < stacks; stack += 1) {
-    let top = bottom;
-    let a = 0;
-    let b = 0;
-    let d = 0;
-    let f = 0;
-    let m = 0;
-    let j = (i + count) | 0;
-    const end = j;
-    for (let n = 0; i < end; n = (n + 1) | 0) {
-      const height = x[i] ?? 0;
-      const below = top;
-      top = below + height;
-      const twice = below + top;
-      const stiffness = (k[n] ?? 0) * (x[j] ?? 0) * height;
-      const pull = (x[l] ?? 0) * height;
-      a += stiffness;
-      b += stiffness * twice;
-      d += stiffness * (twice * twice - below * top);
-      f += pull;
-      m += pull * twice;
-      i = (i + 1) | 0;
-      j = (j + 1) | 0;
-      l = (l + 1) | 0;
-    }
-    i = (j + count) | 0;
-    l = (l + stressStep - count) | 0;
-    // Here b, m and d are 2 B, 2 M and 3 D.
-    const rigid = d * a * (4 / 3) - b * b;
-    sumOfStiffness[stack] = a;
-    sumOfMoments[stack] = b;
-    stiff[stack] = rigid;
-    sumOfForces[stack] = f;
-    bent[stack] = (2 * (m * a - f * b)) / rigid;
-  }
-}
+export const bendStacks = kernel.bendStacks;
+
+const { stretching, firstMoment, rigidity, force, curvature } = kernel;
 
 /** Curvature of a stack that was bent, 1/m. */
 export function curvatureOf(stack: number): number {

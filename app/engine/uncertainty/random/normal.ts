@@ -72,15 +72,26 @@ function firstTries(out: Float64Array, from: number, to: number, words: Int32Arr
   return beyond;
 }
 
-function tried(out: Float64Array, n: number, layer: number, word: number, beyond: number): number {
-  // By local names, so that V8 reads them as the constants that they are.
+/**
+ * One first try, which notes its place and returns how many places are noted if it does not hold. Made by another function, so that
+ * V8 takes the tables around it as the constants that they are (a bundler turns those of a module into variables).
+ */
+const tried = /* @__PURE__ */ makeTried();
+
+function makeTried() {
   const width = widths;
   const limit = inside;
   const places = again;
-  const x = word * (width[layer] ?? 0);
-  out[n] = x;
-  places[beyond] = n;
-  return (beyond + (Math.abs(x) < (limit[layer] ?? 0) ? 0 : 1)) | 0;
+  return (out: Float64Array, n: number, layer: number, word: number, beyond: number): number => {
+    // By names of its own, as `bendStacks`.
+    const w = width;
+    const safe = limit;
+    const noted = places;
+    const x = word * (w[layer] ?? 0);
+    out[n] = x;
+    noted[beyond] = n;
+    return (beyond + (Math.abs(x) < (safe[layer] ?? 0) ? 0 : 1)) | 0;
+  };
 }
 
 /** Tries the first of the noted places again, in their order. */
