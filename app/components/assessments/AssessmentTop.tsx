@@ -1,5 +1,6 @@
 import { Link } from "react-router";
 import { Notice } from "#app/components/ui/Notice.tsx";
+import { revisionLetters } from "#app/lib/assessment-revision.ts";
 import type { AssessmentHead } from "#app/lib/assessment-view.ts";
 import { AssessmentActions } from "./AssessmentActions.tsx";
 
@@ -26,13 +27,13 @@ export function AssessmentTop({ head, refused }: { head: AssessmentHead; refused
           {head.lot ? (
             <>
               <Link to={`/assessments/${head.lot.of.id}`} className="link text-quiet">
-                Assessment {head.number}
+                Assessment {revisionLetters(head.number)}
               </Link>
               <span aria-hidden="true"> / </span>
               <span aria-current="page">Lot {head.lot.name}</span>
             </>
           ) : (
-            <span aria-current="page">Assessment {head.number}</span>
+            <span aria-current="page">Assessment {revisionLetters(head.number)}</span>
           )}
         </nav>
         <div className="ml-auto flex flex-wrap gap-2 max-tablet:hidden">

@@ -31,7 +31,7 @@ export function FinderPage({ found, page }: Props) {
         crumbs={[
           { name: "Flows", path: "/flows" },
           { name: head.flow.name, path: `/flows/${head.flow.id}` },
-          { name: `Assessment, revision ${head.revision}`, path: `/assessments/${head.id}` },
+          { name: `Assessment ${head.revision}`, path: `/assessments/${head.id}` },
         ]}
         remark={tried > 0 ? `${tried} tried, ${fits === 1 ? "1 fits" : `${fits} fit`}` : ""}
         actions={

@@ -30,7 +30,7 @@ export function RemediesPage({ head, view, question }: RemediesPageData) {
         crumbs={[
           { name: "Flows", path: "/flows" },
           { name: head.flow.name, path: `/flows/${head.flow.id}` },
-          { name: `Assessment, revision ${head.revision}`, path: `/assessments/${head.id}` },
+          { name: `Assessment ${head.revision}`, path: `/assessments/${head.id}` },
         ]}
       />
       <TrialBarred head={head} />

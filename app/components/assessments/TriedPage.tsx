@@ -18,7 +18,7 @@ export function TriedPage({ page }: { page: TriedPageData }) {
         crumbs={[
           { name: "Flows", path: "/flows" },
           { name: head.flow.name, path: `/flows/${head.flow.id}` },
-          { name: `Assessment, revision ${head.revision}`, path: `/assessments/${head.id}` },
+          { name: `Assessment ${head.revision}`, path: `/assessments/${head.id}` },
         ]}
         actions={
           head.barred === null ? (

@@ -79,7 +79,7 @@ function Rows({ view: { rows, without } }: { view: WafersView }) {
       </div>
       <p className="mt-2 max-w-160 text-label text-quiet">
         {without.length > 0
-          ? `Held flat, or without a shape that is known: ${without.length === 1 ? "step" : "steps"} ${without.join(", ")}. `
+          ? `Held flat: ${without.length === 1 ? "step" : "steps"} ${without.join(", ")}. `
           : ""}
         ± is the standard error that 20,000 wafers leave. A share is that of the moment at which most wafers are beyond:
         as the wafer is loaded, as it leaves, or free at peak. Curvature is taken as a sum of parabolas, one for each

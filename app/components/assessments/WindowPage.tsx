@@ -26,7 +26,7 @@ export function WindowPage({ page, question = null }: WindowPageProps) {
         crumbs={[
           { name: "Flows", path: "/flows" },
           { name: head.flow.name, path: `/flows/${head.flow.id}` },
-          { name: `Assessment, revision ${head.revision}`, path: `/assessments/${head.id}` },
+          { name: `Assessment ${head.revision}`, path: `/assessments/${head.id}` },
         ]}
       />
       <Form method="get" className="screen-only mb-4 max-w-280" key={asked}>

@@ -56,7 +56,7 @@ export const TEMPLATE_FLOWS: TemplateFlow[] = [
     incoming: 775,
     steps: twoCarrierSteps({
       first: {
-        carrier: "Borosilicate glass, 300 mm",
+        carrier: "Aluminosilicate glass, low expansion, 300 mm",
         material: "Laser release on thermoset (class)",
         thickness: 50,
         peak: 180,
