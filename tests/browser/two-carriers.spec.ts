@@ -38,7 +38,7 @@ test.describe.configure({ timeout: 90_000 });
 test("a transfer says which carriers hold the wafer, by which face, and what is let go", async ({ page }) => {
   await fromTemplate(page, "Transfer, as it comes");
   await expect(row(page, "Bond to Silicon carrier")).toContainText("on the back side");
-  await expect(row(page, FIRST_DEBOND)).toContainText("lets go Borosilicate glass, 300 mm");
+  await expect(row(page, FIRST_DEBOND)).toContainText("lets go Aluminosilicate glass, low expansion, 300 mm");
   await assess(page);
   const bonds = page.getByRole("heading", { name: "The bonds" }).locator("..");
   await expect(bonds).toContainText("device side");
