@@ -4,7 +4,8 @@ import { needNumpy, python } from "./numpy.mjs";
 import { CURVATURE, ROWS, withScanFile } from "./scan-file.mjs";
 
 const ROUNDS = 3;
-const beside = (name) => fileURLToPath(new URL(name, import.meta.url));
+/** A file of this folder. The bench runs built, as deep below the root as its source is. */
+const beside = (name) => fileURLToPath(new URL(`../../../app/cli/bench/${name}`, import.meta.url));
 
 function answer(program, args) {
   const run = spawnSync(program, args, { encoding: "utf8" });
