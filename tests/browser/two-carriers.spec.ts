@@ -12,7 +12,7 @@ async function fromTemplate(page: Page, name: string): Promise<string> {
   await signIn(page, "engineer");
   await page.goto("/flows/library/flows");
   await page.getByRole("link", { name: TEMPLATE }).click();
-  await page.getByRole("link", { name: /flow from/i }).click();
+  await page.getByRole("link", { name: "New flow from it", exact: true }).click();
   await page.getByLabel("Program").selectOption({ label: "Petrel" });
   await page.getByLabel("Name", { exact: true }).fill(name);
   await press(page, "Save with the steps below");
