@@ -37,15 +37,20 @@ export function tightestStep({ findings }: Pick<JudgedFlow, "findings">) {
 
 /**
  * The answer in plain words: one sentence on support, one on what decides. The first is what a technician needs, the second
- * what an engineer asks next. Of a flow that parts by slot it is that of the worst leg, which it names, and the others' verdicts last.
+ * what an engineer asks next. Of a leg of a flow that parts by slot it names the slots; of the flow itself it is that of
+ * the worst leg, with the verdicts of the others last.
  */
 export function answerSentences(flow: FlowInput, assessment: JudgedFlow): string[] {
-  const { slots, legs = [] } = assessment;
+  const slots = assessment.slots ?? flow.leg?.slots;
   const [first = "", ...rest] = sentencesOf(flow, assessment);
   if (!slots) return [first, ...rest];
-  const others = legs.filter((leg) => leg.slots !== slots);
-  const verdicts = others.map(({ slots: of, verdict }) => `${slotsInWords(of)}: ${verdict.outcome}`);
-  return [`${sentence(slotsInWords(slots))}: ${inSentence(first)}`, ...rest, finish("", sentence(verdicts.join("; ")))];
+  const others = (assessment.legs ?? []).filter((leg) => leg.slots !== slots);
+  const verdicts = others.map((leg) => `${slotsInWords(leg.slots)}: ${leg.verdict.outcome}`);
+  return [
+    `${sentence(slotsInWords(slots))}: ${inSentence(first)}`,
+    ...rest,
+    ...(verdicts.length > 0 ? [finish("", sentence(verdicts.join("; ")))] : []),
+  ];
 }
 
 function sentencesOf(flow: FlowInput, assessment: JudgedFlow): string[] {

@@ -1,5 +1,6 @@
 import { EngineInputError } from "../errors.ts";
 import { ROOM_TEMPERATURE } from "../laminate/layer.ts";
+import { runsInWords } from "../runs-in-words.ts";
 import type { FlowInput, StepInput } from "./model.ts";
 import { heatDuration } from "./temperature-profile.ts";
 
@@ -87,16 +88,7 @@ function skipped(step: StepInput, planned: StepInput["planned"]): StepInput {
   };
 }
 
-/** Slots in words, runs of three and more joined: 'slots 1 to 12', 'slot 3', 'slots 1, 2, 5 to 9'. */
+/** 'slots 1 to 12', 'slot 3', 'slots 1, 2, 5 to 7 and 9'. */
 export function slotsInWords(slots: readonly number[]): string {
-  const runs: { from: number; to: number }[] = [];
-  for (const slot of slots) {
-    const last = runs.at(-1);
-    if (last && slot === last.to + 1) last.to = slot;
-    else runs.push({ from: slot, to: slot });
-  }
-  const words = runs.map(({ from, to }) =>
-    from === to ? `${from}` : to === from + 1 ? `${from}, ${to}` : `${from} to ${to}`,
-  );
-  return `${slots.length === 1 ? "slot" : "slots"} ${words.join(", ")}`;
+  return `${slots.length === 1 ? "slot" : "slots"} ${runsInWords(slots)}`;
 }

@@ -84,7 +84,7 @@ describe("the legs of a flow", () => {
   it("are said in words", () => {
     expect(slotsInWords(range(1, 12))).toBe("slots 1 to 12");
     expect(slotsInWords([3])).toBe("slot 3");
-    expect(slotsInWords([1, 2, 5, 6, 7, 9])).toBe("slots 1, 2, 5 to 7, 9");
+    expect(slotsInWords([1, 2, 5, 6, 7, 9])).toBe("slots 1, 2, 5 to 7 and 9");
   });
 });
 
