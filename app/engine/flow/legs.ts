@@ -32,6 +32,14 @@ export function legFlows(flow: FlowInput): FlowInput[] {
   return [...legs.values()].map((slots) => legOf(flow, slots));
 }
 
+/** The flow as the wafer of a slot goes through it. @throws EngineInputError as `legFlows` does, and for a slot that is none */
+export function legOfSlot(flow: FlowInput, slot: number): FlowInput {
+  const [first, ...others] = legFlows(flow);
+  const leg = others.length === 0 ? first : [first, ...others].find((each) => each?.leg?.slots.includes(slot));
+  if (!leg) throw new EngineInputError("slot", `there is no slot ${slot}`, `1 to ${SLOTS}`);
+  return leg;
+}
+
 /** Whether some step of a flow is for some slots only, so that it cannot be walked before one of its legs is chosen. */
 export function hasLegs({ leg, steps }: Pick<FlowInput, "leg" | "steps">): boolean {
   return !leg && steps.some(({ slots }) => slots);

@@ -1,10 +1,14 @@
 import { describe, expect, it } from "vitest";
+import { defaultLimits } from "#app/engine/rules/limits.ts";
 import { legAnswer, legNumber } from "#app/lib/assessment-leg.ts";
 import { assessmentView } from "#app/lib/assessment-view.ts";
 import { figureAskedFor } from "#app/lib/assessment-working.ts";
 import { legQuery } from "#app/lib/leg-query.ts";
+import { waferAnswer } from "#app/lib/lot-answers.ts";
+import { movementSentence } from "#app/lib/out-of-date-words.ts";
+import { compareResults, movementOf } from "#app/lib/result-comparison.ts";
 import { sheetView } from "#app/lib/sheet-view.ts";
-import { flow, grindStep, step } from "#tests/engine/unit/flow-samples.ts";
+import { addition, exact, flow, grindStep, step, um } from "#tests/engine/unit/flow-samples.ts";
 import { assessed, demoResult, HEAD } from "#tests/fixtures/demo-assessment.ts";
 
 const range = (from: number, to: number) => Array.from({ length: to - from + 1 }, (_, index) => from + index);
@@ -68,6 +72,52 @@ describe("an assessment of a flow that parts by slot", () => {
     expect(other.support.numbers).toEqual([1, 2, 4]);
     expect([worst.blocked, other.blocked]).toEqual([true, false]);
     expect(other.titleBlock.title).toMatch(/, slots 1 to 12$/);
+  });
+});
+
+describe("two assessments, of which one or both part by slot", () => {
+  const whole = assessed(flow([step({ title: "Receive" }), grindStep(100, 1, { planned: "bare" }), step()]));
+  const eased = assessed(
+    flow([
+      step({ title: "Receive" }),
+      grindStep(90, 1, { title: "Grind", planned: "bare", slots: range(1, 12) }),
+      grindStep(600, 1, { title: "Grind on", planned: "bare", slots: range(13, 25) }),
+      step({ title: "Look" }),
+    ]),
+  );
+
+  it("are compared for the same slots, where both have them", () => {
+    const { slots, before, after } = compareResults(parted, eased);
+    expect(slots).toBe("Compared for slots 1 to 12, the worst leg of the later one.");
+    expect([before.outcome, after.outcome]).toEqual(["clear", "do not run"]);
+    expect(movementSentence(movementOf(parted, eased))).toContain(slots);
+  });
+
+  it("say so where different slots are held against each other", () => {
+    expect(compareResults(whole, parted).slots).toBe(
+      "Different slots are compared: all slots of the earlier one with slots 13 to 25 of the later one.",
+    );
+    expect(compareResults(whole, whole).slots).toBeNull();
+  });
+});
+
+describe("a wafer of a lot", () => {
+  it("goes the way of its slot", () => {
+    const input = {
+      flow: flow([
+        step({ kind: "receive", title: "Receive", adds: [addition({ thickness: exact(um(2)) })] }),
+        grindStep(300, null, { title: "Grind", planned: "bare", slots: range(13, 25) }),
+        step({ title: "Look" }),
+      ]),
+      limits: defaultLimits(),
+    };
+    const lot = { name: "L1", bow: um(-10), thickness: null, warp: null, edgeChips: null, identity: null, wafers: [] };
+    const [thick, thin, none] = [3, 20, 26].map((slot) =>
+      waferAnswer(input, lot, { slot, bow: um(-10), thickness: null }),
+    );
+    expect(thick?.at?.warp).toBeCloseTo(um(10), 7);
+    expect(thin?.at?.warp).toBeGreaterThan(um(40));
+    expect(none?.outcome).toBe("cannot judge");
   });
 });
 
