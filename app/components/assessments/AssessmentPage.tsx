@@ -67,7 +67,7 @@ export function AssessmentPage({ view, changed, refused }: Props) {
           <SidePane view={view} />
         </div>
         <FlowCourse course={view.course} selected={selected?.number} />
-        {head.mayAssess ? <WafersDrawn key={head.id} assessmentId={head.id} /> : null}
+        {head.mayAssess ? <WafersDrawn key={`${head.id} ${legNumber}`} assessmentId={head.id} leg={legNumber} /> : null}
       </article>
       <section className="mt-6" aria-labelledby="cautions">
         <h2 id="cautions" className="mb-2 font-semibold">
