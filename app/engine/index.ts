@@ -86,7 +86,8 @@ export type { Measured } from "./measured.ts";
 export type { FlowInput, StepInput } from "./flow/model.ts";
 export { walkFlow, type StepState, type WalkOptions } from "./flow/walk.ts";
 export { assessFlow, type FlowAssessment } from "./flow/assess.ts";
-export { judgeFlow, type AssessedStep, type JudgedFlow, type Verdict } from "./flow/judge.ts";
+export { judgeFlow, type AssessedStep, type JudgedFlow, type JudgedLeg, type Verdict } from "./flow/judge.ts";
+export { hasLegs, legFlows, slotsInWords } from "./flow/legs.ts";
 export { answerSentences, supportSpans } from "./flow/answer.ts";
 
 // Handling rules

@@ -1,5 +1,6 @@
 import type { Finding } from "#app/engine/rules/finding.ts";
 import { outcomeRank, type Outcome } from "#app/engine/vocabulary.ts";
+import { legQuery } from "./leg-query.ts";
 import { figureText } from "./assessment-figure.ts";
 
 /** A figure of a finding as text; `working` is the path of the calculation behind it, null where it was read. */
@@ -23,13 +24,20 @@ export interface FindingView {
   remedy: string | null;
 }
 
+/** Where in the stored assessments something stands. */
+export interface ResultPlace {
+  assessmentId: string;
+  /** number of the leg, of a flow that parts by slot */
+  leg: number | null;
+}
+
 /** Address of the working behind a figure of a finding. */
-export function figureWorkingPath(assessmentId: string, finding: number, figure: number): string {
-  return `/assessments/${assessmentId}/working?finding=${finding}&figure=${figure}`;
+export function figureWorkingPath({ assessmentId, leg }: ResultPlace, finding: number, figure: number): string {
+  return `/assessments/${assessmentId}/working?finding=${finding}&figure=${figure}${legQuery("&", leg)}`;
 }
 
 /** A finding as a page shows it. */
-export function findingView(assessmentId: string, finding: Finding, index: number): FindingView {
+export function findingView(place: ResultPlace, finding: Finding, index: number): FindingView {
   const { rule, title, step, outcome, reason, figures, limit, remedy } = finding;
   return {
     index,
@@ -41,7 +49,7 @@ export function findingView(assessmentId: string, finding: Finding, index: numbe
     figures: figures.map((figure, at) => ({
       label: figure.label,
       value: figureText(figure),
-      working: figure.working ? figureWorkingPath(assessmentId, index, at) : null,
+      working: figure.working ? figureWorkingPath(place, index, at) : null,
     })),
     limit: limit && `${limit.label}: ${figureText(limit)} (${limit.source})`,
     remedy,

@@ -1,10 +1,12 @@
 import { tightestStep } from "#app/engine/flow/answer.ts";
+import { slotsInWords } from "#app/engine/flow/legs.ts";
 import type { TemperatureProfile } from "#app/engine/flow/temperature-profile.ts";
 import { formatQuantity } from "#app/engine/units/format.ts";
 import { outcomeRank, type Outcome, type SourceKind } from "#app/engine/vocabulary.ts";
 import type { AssessmentResult, ShapeResult, StepResult } from "#app/schemas/assessment-result.ts";
 import { celsius, micrometres } from "./assessment-figure.ts";
-import { bySeverity, findingView, type FindingView } from "./assessment-finding.ts";
+import { legQuery } from "./leg-query.ts";
+import { bySeverity, findingView, type FindingView, type ResultPlace } from "./assessment-finding.ts";
 import { heldFlat, releasedText, shapeText, standardBowText } from "./assessment-shape.ts";
 import { sentenceCase } from "./assessment-steps.ts";
 import { runWords } from "./run-words.ts";
@@ -59,13 +61,14 @@ export function stepAskedFor(result: AssessmentResult, asked: string | null): nu
 }
 
 /** Everything about one step; null when the result has no such step. */
-export function selectedStep(assessmentId: string, result: AssessmentResult, number: number): SelectedStep | null {
+export function selectedStep(place: ResultPlace, result: AssessmentResult, number: number): SelectedStep | null {
   const step = result.steps.find((each) => each.number === number);
   if (!step) return null;
   const findings = result.findings.flatMap((finding, index) =>
-    finding.step === number ? [findingView(assessmentId, finding, index)] : [],
+    finding.step === number ? [findingView(place, finding, index)] : [],
   );
-  const path = (shape: StepShape) => `/assessments/${assessmentId}/working?step=${number}&shape=${shape}`;
+  const path = (shape: StepShape) =>
+    `/assessments/${place.assessmentId}/working?step=${number}&shape=${shape}${legQuery("&", place.leg)}`;
   const line = (shape: StepShape, found: ShapeResult, text: string): ShapeLine => ({
     text,
     working: found.working ? path(shape) : null,
@@ -81,7 +84,7 @@ export function selectedStep(assessmentId: string, result: AssessmentResult, num
     released: step.planned === "bare" ? null : line("released", step.released, `${ifLetGo(step)}.`),
     run: runWords(step),
     profile: step.profile ? { points: step.profile, words: profileWords(step.profile) } : null,
-    remarks: step.remarks ?? [],
+    remarks: [...slotRemarks(step), ...(step.remarks ?? [])],
     open: findings.filter(({ outcome }) => outcome !== "clear").sort(bySeverity),
     clear: findings.filter(({ outcome }) => outcome === "clear"),
     budget: step.budget.map(({ input, source, contribution }) => ({
@@ -95,6 +98,13 @@ export function selectedStep(assessmentId: string, result: AssessmentResult, num
         : null
       : `${sentenceCase(heldFlat(step.planned))}: it has no bow of its own here.`,
   };
+}
+
+/** That a step is for some slots only, and whether the wafers that are looked at are in one of them. */
+function slotRemarks({ slots, skipped }: StepResult): string[] {
+  if (!slots) return [];
+  const words = slotsInWords(slots);
+  return [skipped ? `Only ${words} take this step: here the wafer is left as it is.` : `Only ${words} take this step.`];
 }
 
 function asLoaded(step: StepResult, shape: ShapeResult): string {

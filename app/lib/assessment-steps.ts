@@ -1,4 +1,5 @@
 import type { BowShape } from "#app/components/drawings/bow-shape.ts";
+import { slotsInWords } from "#app/engine/flow/legs.ts";
 import type { Finding } from "#app/engine/rules/finding.ts";
 import type { FaceUp, Holding, Outcome, SupportClass } from "#app/engine/vocabulary.ts";
 import type { AssessmentResult, BondResult, StepResult } from "#app/schemas/assessment-result.ts";
@@ -30,7 +31,7 @@ export interface StepRow {
   planned: string | null;
   required: SupportClass;
   outcome: Outcome;
-  /** the worst finding in a few words; null when all are clear */
+  /** the worst finding in a few words; null when all are clear and the step is taken */
   note: string | null;
   /** how many more findings of the step are not clear */
   more: number;
@@ -54,7 +55,7 @@ function stepRow(step: StepResult, findings: Finding[], bonds: BondResult[]): St
   const [worst, ...others] = findings.filter(({ outcome }) => outcome !== "clear").sort(bySeverity);
   return {
     number: step.number,
-    title: step.title,
+    title: titleWithSlots(step),
     shortName: SHORT_STEP_NAMES[step.kind],
     silicon: { thickness: step.silicon, text: formatBare(step.silicon, "length", "µm") },
     temperature: { peak: step.peakTemperature, text: withoutUnit(celsius(step.peakTemperature)) },
@@ -67,9 +68,14 @@ function stepRow(step: StepResult, findings: Finding[], bonds: BondResult[]): St
     planned: planned === "bare" ? null : plannedInFull(step, bonds),
     required: step.required,
     outcome: step.outcome,
-    note: worst ? findingNote(worst) : null,
+    note: worst ? findingNote(worst) : step.skipped ? "skipped" : null,
     more: others.length,
   };
+}
+
+/** What is done, and for which slots where it is not for all. */
+export function titleWithSlots({ title, slots }: Pick<StepResult, "title" | "slots">): string {
+  return slots ? `${title}, ${slotsInWords(slots)}` : title;
 }
 
 const isUp = (faceUp: FaceUp) => faceUp === "device side";

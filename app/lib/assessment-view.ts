@@ -9,7 +9,8 @@ import type { AssessmentResult, BondResult, StepResult } from "#app/schemas/asse
 import type { LotRecord } from "#app/schemas/lot.ts";
 import { withPieceMark } from "./carrier-units.ts";
 import { celsius, figureText, micrometres } from "./assessment-figure.ts";
-import { bySeverity, figureWorkingPath } from "./assessment-finding.ts";
+import { legAnswer, type LegsView } from "./assessment-leg.ts";
+import { bySeverity, figureWorkingPath, type ResultPlace } from "./assessment-finding.ts";
 import { assessmentNumber } from "./assessment-number.ts";
 import { revisionOf } from "./assessment-revision.ts";
 import { selectedStep, stepAskedFor, type SelectedStep } from "./assessment-selected.ts";
@@ -66,6 +67,8 @@ export interface BondView {
 /** An assessment as its page shows it: everything formatted, workings left out. */
 export interface AssessmentView {
   head: AssessmentHead;
+  /** the legs of a flow that parts by slot, and the one that everything below is of; null where it does not */
+  legs: LegsView | null;
   diameter: number;
   outcome: Outcome;
   /** where the verdict arises first; null when it is clear */
@@ -86,18 +89,27 @@ export interface AssessmentView {
 /**
  * An assessment for its page.
  * @param asked number of the step to look at, as the address gives it
+ * @param askedLeg the same of the leg, of a flow that parts by slot
  */
-export function assessmentView(head: AssessmentHead, result: AssessmentResult, asked: string | null): AssessmentView {
+export function assessmentView(
+  head: AssessmentHead,
+  whole: AssessmentResult,
+  asked: string | null,
+  askedLeg: string | null = null,
+): AssessmentView {
+  const { result, legs } = legAnswer(whole, askedLeg);
   const { verdict } = result;
+  const place = { assessmentId: head.id, leg: legs?.chosen.number ?? null };
   return {
     head,
+    legs,
     diameter: result.wafer.diameter,
     outcome: verdict.outcome,
     where: verdict.step === null ? null : `first at step ${verdict.step}`,
     sentences: result.sentences,
-    figures: answerFigures(head.id, result),
+    figures: answerFigures(place, result),
     steps: stepRows(result),
-    selected: selectedStep(head.id, result, stepAskedFor(result, asked)),
+    selected: selectedStep(place, result, stepAskedFor(result, asked)),
     course: warpCourse(result),
     remedies: remedies(result.findings),
     assumed: result.assumed,
@@ -125,13 +137,13 @@ export function titleBlock(head: AssessmentHead, documentType: string, page: str
   };
 }
 
-function answerFigures(id: string, result: AssessmentResult): AnswerFigureView[] {
+function answerFigures(place: ResultPlace, result: AssessmentResult): AnswerFigureView[] {
   const tightest = tightestStep(result);
   const thinnest = result.steps.reduce<StepResult | null>(
     (least, step) => (!least || step.silicon < least.silicon ? step : least),
     null,
   );
-  const figures = tightest ? tightestFigures(id, result, tightest) : [];
+  const figures = tightest ? tightestFigures(place, result, tightest) : [];
   if (thinnest) figures.push(thinnestFigure(thinnest));
   figures.push({
     label: "Inputs assumed",
@@ -141,7 +153,7 @@ function answerFigures(id: string, result: AssessmentResult): AnswerFigureView[]
   return figures;
 }
 
-function tightestFigures(id: string, result: AssessmentResult, tightest: Finding): AnswerFigureView[] {
+function tightestFigures(place: ResultPlace, result: AssessmentResult, tightest: Finding): AnswerFigureView[] {
   const [figure] = tightest.figures;
   if (!figure || !tightest.limit) return [];
   const step = result.steps.find(({ number }) => number === tightest.step);
@@ -151,7 +163,7 @@ function tightestFigures(id: string, result: AssessmentResult, tightest: Finding
       label: `Tightest, step ${tightest.step}${rolled ? ", edge lift" : ""}`,
       value: figureText(figure),
       link: figure.working
-        ? { text: "Working", to: figureWorkingPath(id, result.findings.indexOf(tightest), 0) }
+        ? { text: "Working", to: figureWorkingPath(place, result.findings.indexOf(tightest), 0) }
         : null,
     },
     {

@@ -4,7 +4,7 @@ import { alignSteps } from "./align.ts";
 import { assessmentNumber } from "./assessment-number.ts";
 import { revisionLetters } from "./assessment-revision.ts";
 import { movementSentence } from "./out-of-date-words.ts";
-import { compareResults, movementOf, type AnswerSummary, type ComparisonRow } from "./result-comparison.ts";
+import { compareResults, movementOf, sameSlots, type AnswerSummary, type ComparisonRow } from "./result-comparison.ts";
 import { warpCourse, type CourseStep, type CourseValue } from "./warp-course.ts";
 
 /** An assessment that may be compared with. */
@@ -70,6 +70,7 @@ function chosenView(
   slug: string,
 ): NonNullable<ComparisonView["chosen"]> {
   const results = compareResults(before.result, after.result);
+  const earlier = { ...before, result: sameSlots(before.result, after.result) };
   const sameFlow = before.flow.id === after.flow.id;
   const half = (each: ComparedAssessment, answer: AnswerSummary): ComparisonHalf => ({
     ...answer,
@@ -86,7 +87,7 @@ function chosenView(
     engine:
       before.engineVersion === after.engineVersion ? null : { from: before.engineVersion, to: after.engineVersion },
     rows: results.rows,
-    course: comparedCourse(before, after),
+    course: comparedCourse(earlier, after),
   };
 }
 

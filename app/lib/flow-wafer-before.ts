@@ -1,5 +1,6 @@
 import { EngineInputError } from "#app/engine/errors.ts";
 import { bondedFace, type BondState } from "#app/engine/flow/bond.ts";
+import { legFlows, slotsInWords } from "#app/engine/flow/legs.ts";
 import type { FlowInput } from "#app/engine/flow/model.ts";
 import { applyStep, initialState, type FilmState, type WaferState } from "#app/engine/flow/state.ts";
 import { SIDE_NAMES, type FaceUp } from "#app/engine/vocabulary.ts";
@@ -8,6 +9,8 @@ import { filmThicknessText, siliconText } from "./flow-thickness.ts";
 
 /** The wafer as a step finds it, in words. */
 export interface WaferBefore {
+  /** the slots of the wafer that is meant, of a flow that parts by slot; null for any */
+  slots: string | null;
   silicon: string;
   /** outermost first */
   front: string[];
@@ -30,20 +33,25 @@ function bondWords(bond: BondState, { bonds }: WaferState): string {
 }
 
 /**
- * The wafer before the step at `index` (from 0), by the steps before it. Null when one of those leaves no silicon, so that there
+ * The wafer before the step at `index` (from 0), by the steps before it; of a flow that parts by slot that of the first slots that
+ * take the step. Null when one of those leaves no silicon, so that there
  * is no wafer to speak of.
  */
 export function waferBefore(flow: FlowInput, index: number): WaferBefore | null {
   let state: WaferState;
+  let leg: FlowInput;
   try {
-    state = flow.steps
+    const legs = legFlows(flow);
+    leg = legs.find(({ steps }) => steps[index]?.skipped !== true) ?? flow;
+    state = leg.steps
       .slice(0, index)
-      .reduce((wafer, step, at) => applyStep(wafer, step, `steps[${at}]`), initialState(flow));
+      .reduce((wafer, step, at) => applyStep(wafer, step, `steps[${at}]`), initialState(leg));
   } catch (error) {
     if (error instanceof EngineInputError) return null;
     throw error;
   }
   return {
+    slots: leg.leg ? slotsInWords(leg.leg.slots) : null,
     silicon: `${siliconText(state.silicon)}\u00A0µm`,
     front: state.front.map(filmWords).toReversed(),
     back: state.back.map(filmWords),

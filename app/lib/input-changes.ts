@@ -1,5 +1,6 @@
 import type { StepInput } from "#app/engine/flow/model.ts";
 import { LIMIT_DEFINITIONS, type LimitDefinition } from "#app/engine/rules/limits.ts";
+import { runsInWords } from "#app/engine/runs-in-words.ts";
 import type { AssessmentInput, InputChange, InputRecord } from "#app/schemas/assessment-changes.ts";
 import { align, alignSteps } from "./align.ts";
 import { changeTexts, inputProperty, isMeasured, isObject, NONE, valueText } from "./input-property.ts";
@@ -166,7 +167,9 @@ function compareSteps(found: Changes, before: readonly StepInput[], after: reado
     if (pair.before && pair.after) {
       const own = owner(pair.after, numberAfter.get(pair.after) ?? 0);
       for (const key of Object.keys(pair.before) as (keyof StepInput)[])
-        found.compare(pair.before[key], pair.after[key], key, own);
+        if (key !== "slots") found.compare(pair.before[key], pair.after[key], key, own);
+      const [from, to] = [slotsText(pair.before), slotsText(pair.after)];
+      if (from !== to) found.note(own, "Slots", { from, to });
     } else if (pair.before) {
       const number = numberBefore.get(pair.before) ?? 0;
       found.note(owner(pair.before, number), "Step", { from: `step ${number}`, to: "taken out" });
@@ -176,6 +179,9 @@ function compareSteps(found: Changes, before: readonly StepInput[], after: reado
     }
   }
 }
+
+/** Slots that a step does not name are all of them: nobody who did not know of the question meant anything else. */
+const slotsText = ({ slots }: StepInput) => (slots ? runsInWords(slots) : "all");
 
 const definitions: Record<string, LimitDefinition> = LIMIT_DEFINITIONS;
 

@@ -91,7 +91,9 @@ function withStress(flow: FlowInput, at: number, stress: Measured): FlowInput {
 
 /** Standard bow of the wafer once received, 25 °C, m. */
 export function bowOnReceipt({ flow, limits }: AssessmentInput): number {
-  const [received] = walkFlow({ ...flow, steps: flow.steps.slice(0, 1) }, limits).steps;
+  const [receipt] = flow.steps;
+  // Slots that skip the receipt are of no other lot: what comes in is what the others receive.
+  const received = walkFlow({ ...flow, steps: receipt ? [{ ...receipt, slots: null }] : [] }, limits).steps[0];
   const shape = received?.released;
   if (!shape || shape.regime === "curled")
     throw new EngineInputError(

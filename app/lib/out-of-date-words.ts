@@ -32,7 +32,7 @@ export function movementSentence(movement: Movement): string {
       : moved.length === 1
         ? "one step’s finding or support changes"
         : `finding or support changes at ${moved.length} steps`;
-  return `${verdict}; ${steps}. ${tightestSentence(before, after)}`.trim();
+  return [`${verdict}; ${steps}.`, tightestSentence(before, after), movement.slots].filter(Boolean).join(" ");
 }
 
 const placed = ({ outcome, where }: AnswerSummary) => (where === null ? outcome : `${outcome}, ${where}`);

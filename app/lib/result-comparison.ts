@@ -1,4 +1,5 @@
 import { tightestStep } from "#app/engine/flow/answer.ts";
+import { slotsInWords } from "#app/engine/flow/legs.ts";
 import { supportClassOf, supportRank, type Outcome, type SupportClass } from "#app/engine/vocabulary.ts";
 import type { Movement } from "#app/schemas/assessment-changes.ts";
 import type { AssessmentResult, ShapeResult, StepResult } from "#app/schemas/assessment-result.ts";
@@ -38,19 +39,42 @@ export interface ComparisonRow {
 }
 
 export interface ResultComparison {
+  /** said where the flow of one of the two parts by slot: which slots are held against which */
+  slots: string | null;
   before: AnswerSummary;
   after: AnswerSummary;
   rows: ComparisonRow[];
 }
 
-/** Two results side by side, steps aligned. */
-export function compareResults(before: AssessmentResult, after: AssessmentResult): ResultComparison {
+/**
+ * Two results side by side, steps aligned. Of a flow that parts by slot it is the later one's worst leg, beside the earlier one's leg
+ * of the same slots; where that one has no such leg, beside its worst.
+ */
+export function compareResults(earlier: AssessmentResult, after: AssessmentResult): ResultComparison {
+  const before = sameSlots(earlier, after);
   const [rowsBefore, rowsAfter] = [rowsByNumber(before), rowsByNumber(after)];
   return {
+    slots: slotsCompared(before, after),
     before: answerSummary(before),
     after: answerSummary(after),
     rows: alignSteps(before.steps, after.steps).map((pair) => comparisonRow(pair, rowsBefore, rowsAfter)),
   };
+}
+
+const keyOf = (slots: readonly number[] | undefined) => (slots ?? []).join(" ");
+
+/** The leg of a result that is of the same slots as another result; the result itself where it has none. */
+export function sameSlots(result: AssessmentResult, other: AssessmentResult): AssessmentResult {
+  const leg = result.legs?.find(({ slots }) => keyOf(slots) === keyOf(other.slots));
+  return leg?.result ?? result;
+}
+
+function slotsCompared(before: AssessmentResult, after: AssessmentResult): string | null {
+  const words = ({ slots }: AssessmentResult) => (slots ? slotsInWords(slots) : "all slots");
+  if (!before.slots && !after.slots) return null;
+  if (keyOf(before.slots) === keyOf(after.slots))
+    return `Compared for ${words(after)}, the worst leg of the later one.`;
+  return `Different slots are compared: ${words(before)} of the earlier one with ${words(after)} of the later one.`;
 }
 
 /** How an answer moves from a stored result to what would be computed now. */

@@ -13,6 +13,7 @@ import {
 } from "#app/engine/vocabulary.ts";
 import type { AssessmentResult, BondResult, ShapeResult, StepResult } from "#app/schemas/assessment-result.ts";
 import { withPieceMark } from "./carrier-units.ts";
+import { legAnswer, type LegsView } from "./assessment-leg.ts";
 import { celsius } from "./assessment-figure.ts";
 import { assessmentNumber } from "./assessment-number.ts";
 import { liesWord } from "./assessment-shape.ts";
@@ -63,6 +64,8 @@ export interface SheetView {
   assessmentId: string;
   number: string;
   revision: string;
+  /** the slots that it is for, of a flow that parts by slot, and the sheets of the others; null for all slots */
+  legs: LegsView | null;
   /** the one lot that it is for; null for every lot of the flow */
   lot: string | null;
   program: string;
@@ -89,14 +92,21 @@ export interface SheetView {
   titleBlock: TitleBlockFields;
 }
 
-/** An assessment as the page for hands. */
-export function sheetView(head: AssessmentHead, result: AssessmentResult): SheetView {
+/**
+ * An assessment as the page for hands.
+ * @param askedLeg number of the leg that it is for, as the address gives it, of a flow that parts by slot
+ */
+export function sheetView(head: AssessmentHead, whole: AssessmentResult, askedLeg: string | null = null): SheetView {
+  const { result: walked, legs } = legAnswer(whole, askedLeg);
+  // What the slots of this sheet skip is nothing that hands do.
+  const result = { ...walked, steps: walked.steps.filter(({ skipped }) => !skipped) };
   const { steps, verdict, bonds } = result;
   const groups = sheetGroups(steps);
   return {
     assessmentId: head.id,
     number: assessmentNumber(head.program.slug, head.documentNumber),
     revision: revisionOf(head),
+    legs,
     lot: head.lot?.name ?? null,
     program: head.program.name,
     flow: head.flow.name,
@@ -116,8 +126,13 @@ export function sheetView(head: AssessmentHead, result: AssessmentResult): Sheet
     groups: groups.map((group, index) => groupView(group, groups[index - 1]?.steps.at(-1) ?? null, result)),
     bonds: bonds.map((bond) => bondView(bond, bonds, steps)),
     tapes: [...new Set(groups.flatMap(({ holding }) => (isTape(holding) ? [sentenceCase(holding)] : [])))],
-    titleBlock: titleBlock(head, "Handling-risk sheet", "1 of 1"),
+    titleBlock: ofSlots(titleBlock(head, "Handling-risk sheet", "1 of 1"), legs),
   };
+}
+
+/** The title of a sheet that is for some slots names them. */
+function ofSlots(fields: TitleBlockFields, legs: LegsView | null): TitleBlockFields {
+  return legs ? { ...fields, title: `${fields.title}, ${legs.chosen.slots}` } : fields;
 }
 
 /** What is planned to hold a step, for the support bar. */

@@ -1,17 +1,7 @@
+import { runsInWords } from "#app/engine/runs-in-words.ts";
+
 /** Step numbers, ascending, with runs joined: '7', '1 to 12', '3 and 8', '3, 8 and 10 to 12'. */
-export function stepNumbers(numbers: readonly number[]): string {
-  const runs: [from: number, to: number][] = [];
-  for (const number of numbers) {
-    const last = runs.at(-1);
-    if (last && last[1] + 1 === number) last[1] = number;
-    else runs.push([number, number]);
-  }
-  const words = runs.flatMap(([from, to]) =>
-    from === to ? [`${from}`] : to === from + 1 ? [`${from}`, `${to}`] : [`${from} to ${to}`],
-  );
-  const end = words.pop() ?? "";
-  return words.length === 0 ? end : `${words.join(", ")} and ${end}`;
-}
+export const stepNumbers = runsInWords;
 
 /** 'step 7', 'steps 1 to 12'. */
 export function stepsInWords(numbers: readonly number[]): string {

@@ -5,10 +5,15 @@ import type { PlaceView } from "./remedies-view.ts";
  * @param posted the change, as it is posted to try it on a copy
  * @param at the finding whose working is shown; the worst that the change moves when it is not said
  */
-export function triedPath(assessmentId: string, posted: string, at: PlaceView | null = null): string {
+export function triedPath(
+  { id, leg }: { id: string; leg: { number: number } | null },
+  posted: string,
+  at: PlaceView | null = null,
+): string {
   const search = new URLSearchParams({ changes: posted });
+  if (leg) search.set("leg", `${leg.number}`);
   if (at) search.set("at", `${at.step}.${at.rule}`);
-  return `/assessments/${assessmentId}/tried?${search.toString()}`;
+  return `/assessments/${id}/tried?${search.toString()}`;
 }
 
 /** The step and rule that an address names; null for anything else. */

@@ -40,8 +40,15 @@ export function toldAnswer(answer: Answer, present: Answer): ToldAnswer {
   if (!answer.computed) return answer;
   const { assessment, sentences } = answer;
   const { outcome, step } = assessment.verdict;
-  const changed = present.computed ? changedSteps(present.assessment, assessment) : null;
+  const before = present.computed ? sameSlots(present.assessment, assessment) : null;
+  const changed = before && changedSteps(before, assessment);
   return { computed: true, outcome, step, sentences, changed };
+}
+
+/** Of the flow as it is, what is of the same slots as an answer: of one that parts by slot the same leg, whichever is its worst. */
+function sameSlots(present: JudgedFlow, { slots }: JudgedFlow): Pick<JudgedFlow, "steps"> | null {
+  if (!slots) return present.slots ? null : present;
+  return present.legs?.find((leg) => leg.slots.join() === slots.join()) ?? null;
 }
 
 /** How the wafer lies after a step, in words; a curled one has a radius, never a bow. */
@@ -66,7 +73,7 @@ export interface StepChange {
 const NOTABLE = 0.02;
 
 /** The steps whose outcome, support or shape differ between two assessments of the same steps. */
-export function changedSteps(before: JudgedFlow, after: JudgedFlow): StepChange[] {
+export function changedSteps(before: Pick<JudgedFlow, "steps">, after: Pick<JudgedFlow, "steps">): StepChange[] {
   return before.steps.flatMap((was, index): StepChange[] => {
     const becomes = after.steps[index];
     if (!becomes) return [];

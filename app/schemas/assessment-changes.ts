@@ -36,6 +36,8 @@ export interface DatedChange extends InputChange {
 export type Movement =
   | {
       outcome: "computed";
+      /** said where the flow parts by slot: which slots are held against which */
+      slots: string | null;
       before: AnswerSummary;
       after: AnswerSummary;
       /** steps whose finding or required support differs, or that only one of the two has */

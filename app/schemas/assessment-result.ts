@@ -44,6 +44,10 @@ export interface StepResult {
   profile?: TemperatureProfile;
   machine?: string;
   recipe?: string;
+  /** slots that take it; absent: all of them */
+  slots?: number[];
+  /** the wafers that this result is of are in none of its slots, so that it does nothing to them */
+  skipped?: true;
   equipment: { name: string; edgesUp: number | null; edgesDown: number | null } | null;
   siliconBefore: number;
   silicon: number;
@@ -101,4 +105,16 @@ export interface AssessmentResult {
   bonds: BondResult[];
   /** highest temperature on tape or film frame that the site allowed, K */
   tapeTemperature: number;
+  /** of a flow that parts by slot: the slots that steps, findings and verdict are of, those of its worst leg */
+  slots?: number[];
+  /** all its legs, by their first slot */
+  legs?: LegResult[];
+}
+
+/** One leg of a flow that parts by slot. */
+export interface LegResult {
+  slots: number[];
+  verdict: Verdict;
+  /** null for the worst, whose result is that of the assessment itself */
+  result: AssessmentResult | null;
 }

@@ -11,6 +11,8 @@ export interface TrialHead {
   /** 'A' */
   revision: string;
   flow: { id: string; name: string };
+  /** number and slots of the leg that is tried on, of a flow that parts by slot */
+  leg: { number: number; slots: string } | null;
   barred: TrialBar | null;
   /** whether the person may have the inputs, to work things out in the browser */
   mayAssess: boolean;

@@ -108,7 +108,7 @@ test("every card leads to its figures before and after, with what it says of the
   expect(found?.cards.length).toBeGreaterThan(0);
   for (const { posted, clears, eases, verdict } of found?.cards ?? []) {
     const place = clears[0] ?? eases[0] ?? null;
-    const { searchParams } = new URL(triedPath(id, posted, place), "http://localhost");
+    const { searchParams } = new URL(triedPath({ id, leg: null }, posted, place), "http://localhost");
     const page = await triedOf(scope, id, searchParams);
     expect(page.verdict.after).toBe(verdict);
     expect(page.view.shown).toMatchObject({ rule: place?.rule, step: place?.step });

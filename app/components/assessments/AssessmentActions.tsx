@@ -1,9 +1,17 @@
 import { Link } from "react-router";
+import { legQuery } from "#app/lib/leg-query.ts";
 import type { AssessmentHead } from "#app/lib/assessment-view.ts";
 import { RunAgain } from "./RunAgain.tsx";
 
+interface Props {
+  head: AssessmentHead;
+  /** number of the leg that is looked at, of a flow that parts by slot */
+  leg?: number | null;
+  phone?: boolean;
+}
+
 /** What can be done with an assessment. One that is out of date is run again rather than printed. */
-export function AssessmentActions({ head, phone = false }: { head: AssessmentHead; phone?: boolean }) {
+export function AssessmentActions({ head, leg = null, phone = false }: Props) {
   const { outOfDate, lot } = head;
   // A lot's assessment is no revision: its flow is changed, run and compared from the assessment that it is of.
   const mayAssess = head.mayAssess && lot === null;
@@ -26,7 +34,10 @@ export function AssessmentActions({ head, phone = false }: { head: AssessmentHea
         </Link>
       )}
       {mayAssess && !outOfDate && !phone ? <RunAgain /> : null}
-      <Link to={`/sheets/${head.id}`} className={`btn ${outOfDate && mayAssess ? "" : "btn-primary"} ${grow}`}>
+      <Link
+        to={`/sheets/${head.id}${legQuery("?", leg)}`}
+        className={`btn ${outOfDate && mayAssess ? "" : "btn-primary"} ${grow}`}
+      >
         Print the sheet
       </Link>
     </>

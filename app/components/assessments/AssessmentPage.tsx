@@ -10,6 +10,7 @@ import type { OutOfDate } from "#app/schemas/assessment-changes.ts";
 import { AssessmentActions } from "./AssessmentActions.tsx";
 import { AssessmentTop, type NotComputable } from "./AssessmentTop.tsx";
 import { FlowCourse } from "./FlowCourse.tsx";
+import { LegList } from "./LegList.tsx";
 import { OutOfDateSection } from "./OutOfDateSection.tsx";
 import { SidePane } from "./SidePane.tsx";
 import { StepLink } from "./StepLink.tsx";
@@ -28,15 +29,17 @@ interface Props {
 /** An assessment: the answer, all steps on one axis, the steps one by one, and what follows from them. */
 export function AssessmentPage({ view, changed, refused }: Props) {
   const { head, diameter, outcome, where, sentences, figures, steps, selected } = view;
-  const select = useStepSelection();
+  const { select, leg } = useStepSelection();
+  const legNumber = view.legs?.chosen.number ?? null;
   const bows = steps.flatMap(({ bow }) => (bow.shape.kind === "bowed" ? [bow.shape.bow] : []));
   const exaggeration = chooseExaggeration(bows, diameter);
   const rows = { steps, selected, diameter, exaggeration };
   return (
     <>
-      <AssessmentTop head={head} refused={refused} />
+      <AssessmentTop head={head} leg={legNumber} refused={refused} />
       <article className="frame max-tablet:-mx-4 max-tablet:border-x-0">
         <AnswerLine outcome={outcome} where={where ?? undefined} sentences={sentences} figures={figures.map(linked)} />
+        {view.legs ? <LegList legs={view.legs} /> : null}
         {head.lot ? <LotSection lot={head.lot} /> : null}
         {head.outOfDate ? <OutOfDateSection head={head} changed={changed} /> : null}
         <div className="border-t border-ink max-tablet:hidden">
@@ -45,7 +48,7 @@ export function AssessmentPage({ view, changed, refused }: Props) {
               ...step,
               name: step.title,
               selected: step.number === selected?.number,
-              href: stepPath(step.number),
+              href: stepPath(step.number, leg),
             }))}
             diameter={diameter}
             exaggeration={exaggeration}
@@ -64,7 +67,7 @@ export function AssessmentPage({ view, changed, refused }: Props) {
           <SidePane view={view} />
         </div>
         <FlowCourse course={view.course} selected={selected?.number} />
-        {head.mayAssess ? <WafersDrawn key={head.id} assessmentId={head.id} /> : null}
+        {head.mayAssess ? <WafersDrawn key={`${head.id} ${legNumber}`} assessmentId={head.id} leg={legNumber} /> : null}
       </article>
       <section className="mt-6" aria-labelledby="cautions">
         <h2 id="cautions" className="mb-2 font-semibold">
@@ -88,7 +91,7 @@ export function AssessmentPage({ view, changed, refused }: Props) {
         </p>
       )}
       <div className="screen-only sticky bottom-0 z-10 -mx-4 mt-4 flex gap-2 border-t border-ink bg-surface px-4 py-2 tablet:hidden">
-        <AssessmentActions head={head} phone />
+        <AssessmentActions head={head} leg={legNumber} phone />
       </div>
     </>
   );

@@ -10,8 +10,15 @@ export interface NotComputable {
   reason: string;
 }
 
+interface Props {
+  head: AssessmentHead;
+  /** number of the leg that is looked at, of a flow that parts by slot */
+  leg: number | null;
+  refused: NotComputable | undefined;
+}
+
 /** The way here and what can be done, then what has to be known before anything below is believed. */
-export function AssessmentTop({ head, refused }: { head: AssessmentHead; refused: NotComputable | undefined }) {
+export function AssessmentTop({ head, leg, refused }: Props) {
   return (
     <>
       <div className="screen-only flex min-h-14 flex-wrap items-center gap-x-4 gap-y-2 py-3">
@@ -37,7 +44,7 @@ export function AssessmentTop({ head, refused }: { head: AssessmentHead; refused
           )}
         </nav>
         <div className="ml-auto flex flex-wrap gap-2 max-tablet:hidden">
-          <AssessmentActions head={head} />
+          <AssessmentActions head={head} leg={leg} />
         </div>
       </div>
       {refused ? (

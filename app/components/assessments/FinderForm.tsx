@@ -4,7 +4,7 @@ import { TextField } from "#app/components/ui/TextField.tsx";
 import type { FinderPageData } from "#app/schemas/finder.ts";
 
 /** Search, filter and target of the finder; all of it stands in the address. */
-export function FinderForm({ found: { bonds, steps, asked } }: { found: FinderPageData }) {
+export function FinderForm({ found: { head, bonds, steps, asked } }: { found: FinderPageData }) {
   const [search] = useSearchParams();
   const trying = useNavigation().state === "loading";
   const { faults } = asked;
@@ -59,6 +59,7 @@ export function FinderForm({ found: { bonds, steps, asked } }: { found: FinderPa
         className="w-72 max-w-full min-w-0"
       />
       {search.get("sort") ? <input type="hidden" name="sort" value={search.get("sort") ?? ""} /> : null}
+      {head.leg ? <input type="hidden" name="leg" value={head.leg.number} /> : null}
       <button type="submit" className="btn mt-5">
         {trying ? "Trying" : "Show"}
       </button>

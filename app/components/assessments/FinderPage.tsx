@@ -2,11 +2,13 @@ import { Link, useNavigation, useSearchParams } from "react-router";
 import { PageHead } from "#app/components/layout/PageHead.tsx";
 import { DataTable } from "#app/components/ui/DataTable.tsx";
 import { EmptyState } from "#app/components/ui/EmptyState.tsx";
+import { legQuery, trialHome } from "#app/lib/leg-query.ts";
 import type { ListPage } from "#app/lib/list-params.ts";
 import type { FinderPageData, FinderRow } from "#app/schemas/finder.ts";
 import { finderColumns } from "./finder-columns.tsx";
 import { FinderForm } from "./FinderForm.tsx";
 import { TrialBarred } from "./TrialBarred.tsx";
+import { TrialLeg } from "./TrialLeg.tsx";
 
 interface Props {
   found: FinderPageData;
@@ -20,7 +22,7 @@ export function FinderPage({ found, page }: Props) {
   const [search] = useSearchParams();
   const trying = useNavigation().state === "loading";
   const back = (
-    <Link to={`/assessments/${head.id}`} className="btn">
+    <Link to={trialHome(head)} className="btn">
       Back to the assessment
     </Link>
   );
@@ -31,7 +33,7 @@ export function FinderPage({ found, page }: Props) {
         crumbs={[
           { name: "Flows", path: "/flows" },
           { name: head.flow.name, path: `/flows/${head.flow.id}` },
-          { name: `Assessment ${head.revision}`, path: `/assessments/${head.id}` },
+          { name: `Assessment ${head.revision}`, path: trialHome(head) },
         ]}
         remark={tried > 0 ? `${tried} tried, ${fits === 1 ? "1 fits" : `${fits} fit`}` : ""}
         actions={
@@ -43,6 +45,7 @@ export function FinderPage({ found, page }: Props) {
         }
       />
       <TrialBarred head={head} />
+      <TrialLeg head={head} />
       {page === null ? (
         <EmptyState title="This cannot be computed any more" actions={back}>
           The inputs of this assessment are refused by the engine of today. Run it again to see why.
@@ -77,7 +80,7 @@ export function FinderPage({ found, page }: Props) {
               <EmptyState
                 title="None found"
                 actions={
-                  <Link to={`/assessments/${head.id}/carriers`} className="btn">
+                  <Link to={`/assessments/${head.id}/carriers${legQuery("?", head.leg?.number)}`} className="btn">
                     Show all {tried}
                   </Link>
                 }

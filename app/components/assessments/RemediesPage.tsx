@@ -6,11 +6,13 @@ import { PageHead } from "#app/components/layout/PageHead.tsx";
 import { EmptyState } from "#app/components/ui/EmptyState.tsx";
 import { RunBar } from "#app/components/ui/RunBar.tsx";
 import { useInBrowser } from "#app/components/ui/use-in-browser.ts";
+import { legQuery, trialHome, trialPath } from "#app/lib/leg-query.ts";
 import { BY_SERVER, readSent } from "#app/lib/read-sent.ts";
 import type { RemediesView, UnclearedView } from "#app/lib/remedies-view.ts";
 import type { SentTrial, TrialHead, TrialQuestion } from "#app/schemas/trial.ts";
 import { RemedyCards } from "./RemedyCards.tsx";
 import { TrialBarred } from "./TrialBarred.tsx";
+import { TrialLeg } from "./TrialLeg.tsx";
 import { useFlowRun } from "./use-flow-run.ts";
 
 export interface RemediesPageData {
@@ -30,11 +32,16 @@ export function RemediesPage({ head, view, question }: RemediesPageData) {
         crumbs={[
           { name: "Flows", path: "/flows" },
           { name: head.flow.name, path: `/flows/${head.flow.id}` },
-          { name: `Assessment ${head.revision}`, path: `/assessments/${head.id}` },
+          { name: `Assessment ${head.revision}`, path: trialHome(head) },
         ]}
       />
       <TrialBarred head={head} />
-      {view === null ? <Nothing head={head} /> : <Searched key={head.id} head={head} view={view} question={question} />}
+      <TrialLeg head={head} />
+      {view === null ? (
+        <Nothing head={head} />
+      ) : (
+        <Searched key={trialHome(head)} head={head} view={view} question={question} />
+      )}
     </>
   );
 }
@@ -43,7 +50,7 @@ export function RemediesPage({ head, view, question }: RemediesPageData) {
 function Searched({ head, view, question }: RemediesPageData & { view: RemediesView | undefined }) {
   const scripted = useInBrowser();
   const { state, run, stop } = useFlowRun<RemediesView>("remedies", view && { kind: "done", found: view });
-  const ask = () => readSent<SentTrial>(`/assessments/${head.id}/trial`).then((sent) => sent.question);
+  const ask = () => readSent<SentTrial>(trialPath(head.id, head.leg?.number)).then((sent) => sent.question);
   useEffect(() => {
     if (question) run(question);
   }, [question, run]);
@@ -60,7 +67,10 @@ function Searched({ head, view, question }: RemediesPageData & { view: RemediesV
             onStart={() => run(ask())}
             onStop={stop}
             otherwise={
-              <Link to={`/assessments/${head.id}/remedies?${BY_SERVER}`} className="link">
+              <Link
+                to={`/assessments/${head.id}/remedies?${BY_SERVER}${legQuery("&", head.leg?.number)}`}
+                className="link"
+              >
                 Let the server look
               </Link>
             }
@@ -77,7 +87,7 @@ function Nothing({ head }: { head: TrialHead }) {
     <EmptyState
       title="This cannot be computed any more"
       actions={
-        <Link to={`/assessments/${head.id}`} className="btn">
+        <Link to={trialHome(head)} className="btn">
           Back to the assessment
         </Link>
       }
@@ -100,7 +110,7 @@ function Found({ head, view: { cards, uncleared }, whole }: FoundProps) {
       <EmptyState
         title="Nothing to clear"
         actions={
-          <Link to={`/assessments/${head.id}`} className="btn">
+          <Link to={trialHome(head)} className="btn">
             Back to the assessment
           </Link>
         }
@@ -148,7 +158,7 @@ function Uncleared({ each, head }: { each: UnclearedView; head: TrialHead }) {
   return (
     <>
       <FindingTag outcome={outcome}>
-        <Link to={`/assessments/${head.id}?step=${step}`} className="link">
+        <Link to={trialHome(head, step)} className="link">
           step {step}
         </Link>
         , rule {rule}, {title.toLowerCase()}

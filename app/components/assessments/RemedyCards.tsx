@@ -10,7 +10,7 @@ import { WorkingLink } from "./WorkingLink.tsx";
 
 interface Props {
   cards: readonly RemedyCard[];
-  head: Pick<TrialHead, "id" | "barred">;
+  head: Pick<TrialHead, "id" | "barred"> & { leg: { number: number } | null };
   /** whether there is the width of a page for it */
   across?: boolean;
 }
@@ -28,7 +28,7 @@ export function RemedyCards({ cards, head, across = false }: Props) {
             <RemedyText card={card} />
             <p className="screen-only">
               <WorkingLink
-                path={triedPath(head.id, card.posted, card.clears[0] ?? card.eases[0])}
+                path={triedPath(head, card.posted, card.clears[0] ?? card.eases[0])}
                 of={card.changes.map(changePhrase).join("; ")}
               />
             </p>

@@ -3,6 +3,7 @@ import { noBreak } from "#app/components/drawings/no-break.ts";
 import { SourceMark } from "#app/components/drawings/SourceMark.tsx";
 import { TitleBlock } from "#app/components/drawings/TitleBlock.tsx";
 import type { SelectedStep } from "#app/lib/assessment-selected.ts";
+import { legQuery } from "#app/lib/leg-query.ts";
 import type { AssessmentView } from "#app/lib/assessment-view.ts";
 import { AssumedList } from "./AssumedList.tsx";
 import { BondList } from "./BondList.tsx";
@@ -13,11 +14,14 @@ import { SmallestChanges } from "./SmallestChanges.tsx";
 /** What follows from the answer: what clears it, which inputs matter, what was assumed, which bonds; and the title block. */
 export function SidePane({ view }: { view: AssessmentView }) {
   const { remedies, selected, assumed, inputs, bonds, titleBlock } = view;
+  const leg = view.legs?.chosen.number ?? null;
   return (
     <div className="flex flex-col max-wide:border-t max-wide:border-ink wide:border-l wide:border-ink">
       <div className="divide-y divide-line max-wide:tablet:grid max-wide:tablet:grid-cols-2 max-wide:tablet:divide-y-0">
         <PaneSection title="What clears it">
-          {remedies.length > 0 ? <SmallestChanges assessmentId={view.head.id} mayAssess={view.head.mayAssess} /> : null}
+          {remedies.length > 0 ? (
+            <SmallestChanges assessmentId={view.head.id} leg={leg} mayAssess={view.head.mayAssess} />
+          ) : null}
           <RemedyList remedies={remedies} />
         </PaneSection>
         {selected ? <Budget step={selected} /> : null}
@@ -37,7 +41,7 @@ export function SidePane({ view }: { view: AssessmentView }) {
           <PaneSection title={bonds.length === 1 ? "The bond" : "The bonds"}>
             <BondList bonds={bonds} />
             <p className="screen-only mt-2">
-              <Link to={`/assessments/${view.head.id}/carriers`} className="link">
+              <Link to={`/assessments/${view.head.id}/carriers${legQuery("?", leg)}`} className="link">
                 Carriers and bonds that fit
               </Link>
             </p>

@@ -1,6 +1,7 @@
 import { useCallback, useEffect, useState, type ReactNode } from "react";
 import { Link, useFetcher } from "react-router";
 import { RunBar } from "#app/components/ui/RunBar.tsx";
+import { legQuery, trialPath } from "#app/lib/leg-query.ts";
 import { BY_SERVER, readSent } from "#app/lib/read-sent.ts";
 import type { RemediesView, RemedyCard } from "#app/lib/remedies-view.ts";
 import type { SentTrial, TrialHead } from "#app/schemas/trial.ts";
@@ -15,21 +16,27 @@ const SHOWN = 3;
  * The smallest changes that clear an assessment, looked for once the page is there: in the browser by whoever may have the inputs, by
  * the server for everybody else. Without scripts the link alone leads to them.
  */
-export function SmallestChanges({ assessmentId, mayAssess }: { assessmentId: string; mayAssess: boolean }) {
-  return mayAssess ? <LookedForHere assessmentId={assessmentId} /> : <LookedForThere assessmentId={assessmentId} />;
+export function SmallestChanges({ mayAssess, ...of }: Of & { mayAssess: boolean }) {
+  return mayAssess ? <LookedForHere {...of} /> : <LookedForThere {...of} />;
 }
 
-function LookedForHere({ assessmentId }: { assessmentId: string }) {
+interface Of {
+  assessmentId: string;
+  /** number of the leg that is looked at, of a flow that parts by slot */
+  leg: number | null;
+}
+
+function LookedForHere({ assessmentId, leg }: Of) {
   const { state, run, stop } = useFlowRun<RemediesView>("remedies");
   const [barred, setBarred] = useState<TrialHead["barred"]>("role");
   const look = useCallback(() => {
     const ask = async () => {
-      const { head, question } = await readSent<SentTrial>(`/assessments/${assessmentId}/trial`);
+      const { head, question } = await readSent<SentTrial>(trialPath(assessmentId, leg));
       setBarred(head.barred);
       return question;
     };
     run(ask());
-  }, [assessmentId, run]);
+  }, [assessmentId, leg, run]);
   useEffect(look, [look]);
   const bar = (
     <RunBar
@@ -39,7 +46,7 @@ function LookedForHere({ assessmentId }: { assessmentId: string }) {
       onStart={look}
       onStop={stop}
       otherwise={
-        <Link to={`/assessments/${assessmentId}/remedies?${BY_SERVER}`} className="link">
+        <Link to={`/assessments/${assessmentId}/remedies?${BY_SERVER}${legQuery("&", leg)}`} className="link">
           Let the server look
         </Link>
       }
@@ -48,7 +55,8 @@ function LookedForHere({ assessmentId }: { assessmentId: string }) {
   return (
     <Shown
       assessmentId={assessmentId}
-      query=""
+      leg={leg}
+      query={legQuery("?", leg)}
       cards={state.found?.cards ?? []}
       barred={barred}
       none={state.kind === "done"}
@@ -57,9 +65,9 @@ function LookedForHere({ assessmentId }: { assessmentId: string }) {
   );
 }
 
-function LookedForThere({ assessmentId }: { assessmentId: string }) {
-  const { load, data, state } = useFetcher<RemediesPageData>({ key: `remedies ${assessmentId}` });
-  const path = `/assessments/${assessmentId}/remedies?${BY_SERVER}`;
+function LookedForThere({ assessmentId, leg }: Of) {
+  const { load, data, state } = useFetcher<RemediesPageData>({ key: `remedies ${assessmentId} ${leg}` });
+  const path = `/assessments/${assessmentId}/remedies?${BY_SERVER}${legQuery("&", leg)}`;
   useEffect(() => {
     void load(path);
   }, [load, path]);
@@ -71,7 +79,8 @@ function LookedForThere({ assessmentId }: { assessmentId: string }) {
   return (
     <Shown
       assessmentId={assessmentId}
-      query={`?${BY_SERVER}`}
+      leg={leg}
+      query={`?${BY_SERVER}${legQuery("&", leg)}`}
       cards={data?.view?.cards ?? []}
       barred={data?.head.barred ?? "role"}
       none={data !== undefined}
@@ -80,8 +89,7 @@ function LookedForThere({ assessmentId }: { assessmentId: string }) {
   );
 }
 
-interface ShownProps {
-  assessmentId: string;
+interface ShownProps extends Of {
   /** how the pages are asked for that the links lead to */
   query: string;
   cards: readonly RemedyCard[];
@@ -91,12 +99,15 @@ interface ShownProps {
   above: ReactNode;
 }
 
-function Shown({ assessmentId, query, cards, barred, none, above }: ShownProps) {
+function Shown({ assessmentId, leg, query, cards, barred, none, above }: ShownProps) {
   return (
     <div className="mb-3 space-y-2 border-b border-line pb-3">
       {above}
       {cards.length > 0 ? (
-        <RemedyCards cards={cards.slice(0, SHOWN)} head={{ id: assessmentId, barred }} />
+        <RemedyCards
+          cards={cards.slice(0, SHOWN)}
+          head={{ id: assessmentId, leg: leg === null ? null : { number: leg }, barred }}
+        />
       ) : none ? (
         <p className="text-quiet">No change of a single quantity clears any of it.</p>
       ) : null}

@@ -12,10 +12,10 @@ interface Props {
 
 /** A link that looks at a step: in place where scripts run, otherwise by loading the page at it. */
 export function StepLink({ step, selected, className, children }: Props) {
-  const select = useStepSelection();
+  const { select, leg } = useStepSelection();
   return (
     <a
-      href={stepPath(step)}
+      href={stepPath(step, leg)}
       className={className}
       aria-current={selected ? "step" : undefined}
       onClick={selectInPlace(() => select(step))}

@@ -3,9 +3,11 @@ import { FindingTag } from "#app/components/drawings/FindingTag.tsx";
 import { noBreak } from "#app/components/drawings/no-break.ts";
 import { PageHead } from "#app/components/layout/PageHead.tsx";
 import { WorkingView } from "#app/components/working/WorkingView.tsx";
+import { trialHome } from "#app/lib/leg-query.ts";
 import { triedPath } from "#app/lib/tried-path.ts";
 import type { TriedPageData, TriedRow, TriedSide, TriedWorkings } from "#app/lib/tried-view.ts";
 import { TrialBarred } from "./TrialBarred.tsx";
+import { TrialLeg } from "./TrialLeg.tsx";
 import { TryOnCopy } from "./TryOnCopy.tsx";
 
 /** The figures behind a change that was tried, before and after, and the calculation of one of them on both sides. */
@@ -18,7 +20,7 @@ export function TriedPage({ page }: { page: TriedPageData }) {
         crumbs={[
           { name: "Flows", path: "/flows" },
           { name: head.flow.name, path: `/flows/${head.flow.id}` },
-          { name: `Assessment ${head.revision}`, path: `/assessments/${head.id}` },
+          { name: `Assessment ${head.revision}`, path: trialHome(head) },
         ]}
         actions={
           head.barred === null ? (
@@ -27,6 +29,7 @@ export function TriedPage({ page }: { page: TriedPageData }) {
         }
       />
       <TrialBarred head={head} />
+      <TrialLeg head={head} />
       <article className="frame max-tablet:-mx-4 max-tablet:border-x-0">
         <div className="border-b border-ink p-4 tablet:p-6">
           {changes.map((change) => (
@@ -73,7 +76,7 @@ function Rows({ page: { head, posted, view } }: { page: TriedPageData }) {
               <th scope="row" className="font-normal">
                 Step&nbsp;{row.step}, rule&nbsp;{row.rule}
                 <span className="block text-label text-quiet">{row.title}</span>
-                <Shown row={row} to={triedPath(head.id, posted, row)} shown={view.shown} />
+                <Shown row={row} to={triedPath(head, posted, row)} shown={view.shown} />
               </th>
               <td>
                 <Side side={row.before} />

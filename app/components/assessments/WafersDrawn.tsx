@@ -3,6 +3,7 @@ import { noBreak } from "#app/components/drawings/no-break.ts";
 import { RunBar } from "#app/components/ui/RunBar.tsx";
 import { count } from "#app/components/ui/RunProgress.tsx";
 import { useInBrowser } from "#app/components/ui/use-in-browser.ts";
+import { trialPath } from "#app/lib/leg-query.ts";
 import { readSent } from "#app/lib/read-sent.ts";
 import type { WafersRow, WafersView } from "#app/lib/wafers-view.ts";
 import type { SentTrial } from "#app/schemas/trial.ts";
@@ -13,12 +14,12 @@ import { useFlowRun } from "./use-flow-run.ts";
  * How the warp is spread over wafers at every step, by drawing wafers within the tolerances given, beside the first-order band. For
  * whoever may have the inputs, and only where scripts run: a worker draws.
  */
-export function WafersDrawn({ assessmentId }: { assessmentId: string }) {
+export function WafersDrawn({ assessmentId, leg }: { assessmentId: string; leg: number | null }) {
   const scripted = useInBrowser();
   const id = useId();
   const { state, run, stop } = useFlowRun<WafersView>("wafers");
   if (!scripted) return null;
-  const draw = () => run(readSent<SentTrial>(`/assessments/${assessmentId}/trial`).then(({ question }) => question));
+  const draw = () => run(readSent<SentTrial>(trialPath(assessmentId, leg)).then(({ question }) => question));
   return (
     <section className="border-t border-ink p-4 tablet:px-6" aria-labelledby={id}>
       <h2 id={id} className="font-semibold">
@@ -78,11 +79,9 @@ function Rows({ view: { rows, without } }: { view: WafersView }) {
         </table>
       </div>
       <p className="mt-2 max-w-160 text-label text-quiet">
-        {without.length > 0
-          ? `Held flat: ${without.length === 1 ? "step" : "steps"} ${without.join(", ")}. `
-          : ""}
-        ± is the standard error that 20,000 wafers leave. A share is that of the moment at which most wafers are beyond:
-        as the wafer is loaded, as it leaves, or free at peak. Curvature is taken as a sum of parabolas, one for each
+        {without.length > 0 ? `Held flat: ${without.length === 1 ? "step" : "steps"} ${without.join(", ")}. ` : ""}± is
+        the standard error that 20,000 wafers leave. A share is that of the moment at which most wafers are beyond: as
+        the wafer is loaded, as it leaves, or free at peak. Curvature is taken as a sum of parabolas, one for each
         input, which moves the ends of a band by up to 2&nbsp;% of its width; buckling is that of the full shape.
       </p>
     </>

@@ -4,8 +4,10 @@ import { EmptyState } from "#app/components/ui/EmptyState.tsx";
 import { Notice } from "#app/components/ui/Notice.tsx";
 import { SelectField } from "#app/components/ui/SelectField.tsx";
 import { TextField } from "#app/components/ui/TextField.tsx";
+import { trialHome } from "#app/lib/leg-query.ts";
 import { BY_SERVER } from "#app/lib/read-sent.ts";
 import type { AskedAxis, SentWindow, WindowInput, WindowPageData } from "#app/schemas/process-window.ts";
+import { TrialLeg } from "./TrialLeg.tsx";
 import { WindowDrawn } from "./WindowDrawn.tsx";
 
 interface WindowPageProps {
@@ -18,7 +20,7 @@ interface WindowPageProps {
 export function WindowPage({ page, question = null }: WindowPageProps) {
   const { head, inputs, steps, step, x, y, fault } = page;
   const working = useNavigation().state === "loading";
-  const asked = JSON.stringify([x, y, step]);
+  const asked = JSON.stringify([x, y, step, head.leg?.number]);
   return (
     <>
       <PageHead
@@ -26,9 +28,10 @@ export function WindowPage({ page, question = null }: WindowPageProps) {
         crumbs={[
           { name: "Flows", path: "/flows" },
           { name: head.flow.name, path: `/flows/${head.flow.id}` },
-          { name: `Assessment ${head.revision}`, path: `/assessments/${head.id}` },
+          { name: `Assessment ${head.revision}`, path: trialHome(head) },
         ]}
       />
+      <TrialLeg head={head} />
       <Form method="get" className="screen-only mb-4 max-w-280" key={asked}>
         <AxisFields name="x" label="Along" axis={x} inputs={inputs} />
         <AxisFields name="y" label="Upwards" axis={y} inputs={inputs} />
@@ -40,6 +43,7 @@ export function WindowPage({ page, question = null }: WindowPageProps) {
           defaultValue={step === null ? "" : String(step)}
           className="w-120 max-w-full min-w-0"
         />
+        {head.leg ? <input type="hidden" name="leg" value={head.leg.number} /> : null}
         {head.mayAssess ? null : <ByServer />}
         <button type="submit" className="btn btn-primary mt-2" disabled={working}>
           {working ? "Walking the flow" : "Draw"}

@@ -4,6 +4,7 @@ import { FindingTag } from "#app/components/drawings/FindingTag.tsx";
 import { noBreak } from "#app/components/drawings/no-break.ts";
 import type { Column } from "#app/components/ui/DataTable.tsx";
 import { tightestWords } from "#app/lib/finder-rows.ts";
+import { trialHome } from "#app/lib/leg-query.ts";
 import { triedPath } from "#app/lib/tried-path.ts";
 import type { FinderRow } from "#app/schemas/finder.ts";
 import type { TrialHead } from "#app/schemas/trial.ts";
@@ -101,7 +102,7 @@ function RowWorking({
 }) {
   const { step, rule } = reason ?? tightest ?? { step: 0, rule: null };
   const at = rule === null ? null : { step, rule };
-  const path = posted === null ? null : triedPath(head.id, posted, at);
+  const path = posted === null ? null : triedPath(head, posted, at);
   return <WorkingLink path={path} of={`${carrier}, ${material}`} />;
 }
 
@@ -117,7 +118,7 @@ function Misfit({ outcome, reason: { step, rule, text }, head, working }: Misfit
   return (
     <>
       <FindingTag outcome={missed ? "do not run" : outcome} {...(missed ? { word: "Misses the target" } : {})}>
-        <Link to={`/assessments/${head.id}?step=${step}`} className="link">
+        <Link to={trialHome(head, step)} className="link">
           step {step}
         </Link>
         {rule === null ? "" : `, rule ${rule}`}

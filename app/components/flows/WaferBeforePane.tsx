@@ -9,6 +9,7 @@ export function WaferBeforePane({ wafer, number }: { wafer: WaferBefore | null; 
       </h2>
       {wafer ? (
         <dl className="mt-2 space-y-3">
+          {wafer.slots === null ? null : <Part label="As it comes in">{wafer.slots}</Part>}
           <Part label="Device side, outermost first">
             <Films films={wafer.front} />
           </Part>

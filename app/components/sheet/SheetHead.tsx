@@ -13,6 +13,12 @@ export function SheetIdentity({ sheet }: { sheet: SheetView }) {
         <br />
         Handling-risk sheet <strong className="whitespace-nowrap">{sheet.number}</strong>,{" "}
         {sheet.lot === null ? `revision ${sheet.revision}` : `for lot ${sheet.lot} alone`}, program {sheet.program}
+        {sheet.legs === null ? null : (
+          <>
+            <br />
+            <strong>For {sheet.legs.chosen.slots} alone:</strong> the other slots have sheets of their own
+          </>
+        )}
         {sheet.changedSince === null ? null : (
           <>
             <br />

@@ -15,7 +15,7 @@ export function SheetPage({ sheet, paper, printedAt }: { sheet: SheetView; paper
   const pages = sheetPages(sheet, paper);
   return (
     <>
-      <SheetBar assessmentId={sheet.assessmentId} paper={paper} />
+      <SheetBar assessmentId={sheet.assessmentId} paper={paper} legs={sheet.legs} />
       <main id="main">
         <div
           className="overflow-x-auto bg-wash py-6 print:overflow-visible print:bg-transparent print:py-0"

@@ -32,11 +32,11 @@ export function spansOfKinds(steps: readonly BondingStep[]): BondSpan[] {
   return spans;
 }
 
-/** The bonds of a flow in order; a bond to nothing is none. */
+/** The bonds of a flow in order; a bond to nothing is none, nor is one that the wafer skips. */
 export function bondSpans({ steps }: Pick<FlowInput, "steps">): BondSpan[] {
   return spansOfKinds(
-    steps.map(({ kind, bond, debondFace }) => ({
-      kind: kind === "bond" && !bond ? null : kind,
+    steps.map(({ kind, bond, debondFace, skipped }) => ({
+      kind: skipped || (kind === "bond" && !bond) ? null : kind,
       bondFace: bond?.face,
       debondFace,
     })),

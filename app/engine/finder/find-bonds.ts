@@ -2,6 +2,7 @@ import { EngineInputError } from "../errors.ts";
 import type { FlowInput } from "../flow/model.ts";
 import type { StepState } from "../flow/walk.ts";
 import type { Finding, RuleContext } from "../rules/finding.ts";
+import { judgeStep } from "../rules/judge-step.ts";
 import type { SiteLimits } from "../rules/limits.ts";
 import { RULES } from "../rules/rules.ts";
 import type { Catalogue, CatalogueMaterial } from "../trial/catalogue.ts";
@@ -119,7 +120,7 @@ function tryBond(base: WalkedFlow, limits: SiteLimits, { span, choice, target, c
     for (const state of states) {
       if (!planned) count();
       steps[state.number - 1] = state;
-      if (judgeStep(found, context, state, target)) break;
+      if (judgeTried(found, context, state, target)) break;
     }
   } catch (error) {
     if (!(error instanceof EngineInputError)) throw error;
@@ -131,9 +132,10 @@ function tryBond(base: WalkedFlow, limits: SiteLimits, { span, choice, target, c
 }
 
 /** Takes one step into account; true when it bars the choice. */
-function judgeStep(found: TriedBond, context: RuleContext, state: StepState, target: WarpTarget | null): boolean {
+function judgeTried(found: TriedBond, context: RuleContext, state: StepState, target: WarpTarget | null): boolean {
+  // Rule by rule: the first that bars the choice spares the others.
   for (const rule of BOND_RULES)
-    for (const finding of rule.judge(context, state)) {
+    for (const finding of judgeStep(context, state, [rule])) {
       if (outcomeRank(finding.outcome) > outcomeRank(found.outcome)) found.outcome = finding.outcome;
       const value = relativeMargin(finding);
       if (value !== null && (!found.margin || value < found.margin.value)) found.margin = { value, finding };

@@ -1,6 +1,7 @@
 import type { AssessedStep, JudgedFlow } from "./judge.ts";
 import type { FlowInput } from "./model.ts";
 import { inSentence } from "../in-sentence.ts";
+import { slotsInWords } from "./legs.ts";
 import { supportRank, type SupportClass } from "../vocabulary.ts";
 
 /** Steps in a row that need the same support, by number. */
@@ -10,10 +11,11 @@ export interface SupportSpan {
   to: number;
 }
 
-/** The support needed along the flow, neighbours with the same need joined. */
+/** The support needed along the flow, neighbours with the same need joined; steps that the wafer skips are none. */
 export function supportSpans(steps: AssessedStep[]): SupportSpan[] {
   const spans: SupportSpan[] = [];
   for (const { state, required } of steps) {
+    if (state.step.skipped) continue;
     const last = spans.at(-1);
     const support = required ?? "none fits";
     if (last && last.support === support) last.to = state.number;
@@ -35,9 +37,23 @@ export function tightestStep({ findings }: Pick<JudgedFlow, "findings">) {
 
 /**
  * The answer in plain words: one sentence on support, one on what decides. The first is what a technician needs, the second
- * what an engineer asks next.
+ * what an engineer asks next. Of a leg of a flow that parts by slot it names the slots; of the flow itself it is that of
+ * the worst leg, with the verdicts of the others last.
  */
 export function answerSentences(flow: FlowInput, assessment: JudgedFlow): string[] {
+  const slots = assessment.slots ?? flow.leg?.slots;
+  const [first = "", ...rest] = sentencesOf(flow, assessment);
+  if (!slots) return [first, ...rest];
+  const others = (assessment.legs ?? []).filter((leg) => leg.slots !== slots);
+  const verdicts = others.map((leg) => `${slotsInWords(leg.slots)}: ${leg.verdict.outcome}`);
+  return [
+    `${sentence(slotsInWords(slots))}: ${inSentence(first)}`,
+    ...rest,
+    ...(verdicts.length > 0 ? [finish("", sentence(verdicts.join("; ")))] : []),
+  ];
+}
+
+function sentencesOf(flow: FlowInput, assessment: JudgedFlow): string[] {
   const { verdict, findings } = assessment;
   const blocking = findings.find(
     ({ outcome, step, rule }) => outcome === verdict.outcome && step === verdict.step && rule === verdict.rule,
@@ -68,6 +84,8 @@ function supportSentence(flow: FlowInput, { steps, verdict }: JudgedFlow): strin
   const strongest = spans.some(({ support }) => supportRank(support) >= supportRank("none fits"));
   return finish(opening, opening || strongest ? parts.join("; ") : `Needs ${parts.join("; ")}`);
 }
+
+const sentence = (words: string) => words.charAt(0).toUpperCase() + words.slice(1);
 
 const finish = (opening: string, rest: string) => `${opening}${rest}.`;
 

@@ -9,11 +9,23 @@ export interface AssumedInput {
   what: string;
 }
 
-export interface FlowAssessment extends JudgedFlow {
+/** What a flow rests on. */
+export interface InputsCounted {
   /** inputs that nobody measured or looked up */
   assumed: AssumedInput[];
   /** how many inputs there are, assumed ones included */
   inputs: number;
+}
+
+export interface FlowAssessment extends JudgedFlow, InputsCounted {}
+
+/** The inputs of a flow; of one that parts by slot, those of all its legs. */
+export function inputsCounted(flow: FlowInput): InputsCounted {
+  const inputs = statedInputs(flow);
+  return {
+    assumed: inputs.flatMap(({ step, what, source }) => (source === "assumed" ? [{ step, what }] : [])),
+    inputs: inputs.length,
+  };
 }
 
 /**
@@ -21,11 +33,5 @@ export interface FlowAssessment extends JudgedFlow {
  * @throws EngineInputError when an input cannot be computed with; nothing that could not be computed counts as passed
  */
 export function assessFlow(flow: FlowInput, limits: SiteLimits): FlowAssessment {
-  const judged = judgeFlow(flow, limits, FINDING_WORKINGS);
-  const inputs = statedInputs(flow);
-  return {
-    ...judged,
-    assumed: inputs.flatMap(({ step, what, source }) => (source === "assumed" ? [{ step, what }] : [])),
-    inputs: inputs.length,
-  };
+  return { ...judgeFlow(flow, limits, FINDING_WORKINGS), ...inputsCounted(flow) };
 }

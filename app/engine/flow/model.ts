@@ -181,6 +181,10 @@ export interface BondInput extends BondHandling {
 export interface StepInput extends StepHandling {
   kind: StepKind;
   title: string;
+  /** slots of the cassette that take it, from 1, each once and in order; missing: all of them */
+  slots?: number[] | null;
+  /** whether the wafer walked here is in none of its slots, so that it is passed over: `legFlows` says so, nobody else */
+  skipped?: boolean;
   peakTemperature: number;
   /** minutes at peak kept in seconds; null when it does not matter */
   holdTime: number | null;
@@ -214,4 +218,6 @@ export interface FlowInput extends FlowHandling {
     incoming?: IncomingShape | null;
   } & WaferHandling;
   steps: StepInput[];
+  /** the slots that this flow is for, of one that parts by slot; missing: all of them, or not chosen yet */
+  leg?: { slots: number[] } | null;
 }

@@ -13,6 +13,7 @@ const celsius = (kelvin: number) => formatQuantity(kelvin, "temperature", { unit
 
 /** What a step's figures rest on that nobody stated, a sentence each. */
 export function stepRemarks(flow: FlowInput, number: number, step: StepInput, after: WaferState): string[] {
+  if (step.skipped) return incomingTakenAsFilm(flow, number);
   return [
     // Two bonds of one material, or on carriers of one kind, have one remark.
     ...new Set(after.bonds.flatMap((bond) => unstatedFlowPoint(step, bond))),

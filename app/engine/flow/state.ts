@@ -5,6 +5,7 @@ import { otherSide, type FaceUp, type Holding, type Side } from "../vocabulary.t
 import { ROOM_TEMPERATURE } from "../laminate/layer.ts";
 import { bondedFace, bondOn, letGoAt, sameBond, type BondState } from "./bond.ts";
 import { filmEntry } from "./film-entry.ts";
+import { hasLegs } from "./legs.ts";
 import { incomingParts, siliconEntries, type Incoming } from "./silicon.ts";
 import type { StackEntry } from "./stack-entry.ts";
 import type { BumpsInput, TapeInput } from "./handling-inputs.ts";
@@ -55,12 +56,19 @@ export interface WaferState {
 
 /**
  * The wafer before its first step: bare silicon, device side up.
- * @throws EngineInputError for a wafer without thickness, and for anything that is no silicon wafer
+ * @throws EngineInputError for a wafer without thickness, for anything that is no silicon wafer, and for a flow that parts by slot
+ * of which no leg was chosen: there is no one wafer then
  */
 export function initialState(flow: FlowInput): WaferState {
   const kind = flow.wafer.kind ?? "silicon wafer";
   if (kind !== "silicon wafer")
     throw new EngineInputError("wafer.kind", `a ${kind} is out of scope: its bow follows other laws`, "silicon wafer");
+  if (hasLegs(flow))
+    throw new EngineInputError(
+      "slots",
+      "some steps are for some slots only: choose the slots that are looked at",
+      "one leg",
+    );
   if (!(flow.wafer.thickness.value > 0))
     throw new EngineInputError("wafer.thickness", "the silicon must have a thickness", "> 0 m");
   const { orientation, thickness } = flow.wafer;
@@ -191,10 +199,11 @@ function relievedAfter(before: WaferState, step: StepInput): boolean {
 
 /**
  * The wafer after a step has added, removed or changed what it states. What the step cannot do (debond what is not bonded,
- * grind to more than there is) is left undone here and reported by the order rule.
+ * grind to more than there is) is left undone here and reported by the order rule; a step that it skips leaves it as it was.
  * @throws EngineInputError when the remaining silicon is not positive
  */
 export function applyStep(before: WaferState, step: StepInput, field: string): WaferState {
+  if (step.skipped) return before;
   if (step.siliconAfter && !(step.siliconAfter.value > 0))
     throw new EngineInputError(`${field}.siliconAfter`, "no silicon would be left after this step", "> 0 m");
   const thinner = step.siliconAfter !== null && step.siliconAfter.value <= before.silicon.value;

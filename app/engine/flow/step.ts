@@ -41,6 +41,7 @@ export function takeStep(
   step: StepInput,
   { field, metalHistory }: { field: string; metalHistory: boolean },
 ): WalkedStep {
+  if (step.skipped) return passedOver(before, metalHistory);
   const applied = applyStep(before, step, field);
   const flat = heldFlat(step.planned);
   const options = { metalHistory, heldFlat: flat };
@@ -61,6 +62,13 @@ export function takeStep(
   if (!hot || !settled) throw new Error("a step has a hottest moment");
   const cold = settled.temperature === ROOM_TEMPERATURE ? settled : settle(state, ROOM_TEMPERATURE, options);
   return { after: cold.state, hot, cold, flat };
+}
+
+/** The wafer at a step that it skips: as it was, held as it was. */
+function passedOver(before: WaferState, metalHistory: boolean): WalkedStep {
+  const flat = heldFlat(before.holding);
+  const cold = settle(before, ROOM_TEMPERATURE, { metalHistory, heldFlat: flat });
+  return { after: before, hot: cold, cold, flat };
 }
 
 /** The bonds after a step, those that were there before as the step has left them so far. */

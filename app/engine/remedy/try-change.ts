@@ -2,6 +2,7 @@ import { EngineInputError } from "../errors.ts";
 import type { FlowInput } from "../flow/model.ts";
 import { worstOutcome } from "../flow/judge.ts";
 import type { Finding } from "../rules/finding.ts";
+import { judgeStep } from "../rules/judge-step.ts";
 import type { SiteLimits } from "../rules/limits.ts";
 import { RULES } from "../rules/rules.ts";
 import type { Catalogue } from "../trial/catalogue.ts";
@@ -81,8 +82,8 @@ export function standingAfter(trials: Trials, { rule, step }: Place, changes: re
     }
     const context = trialContext({ flow, steps }, limits);
     const state = steps[number - 1];
-    const found = state ? RULES.flatMap((each) => (each.number === rule ? each.judge(context, state) : [])) : [];
-    return standingOf(found);
+    const asked = RULES.filter((each) => each.number === rule);
+    return standingOf(state ? judgeStep(context, state, asked) : []);
   } catch (error) {
     if (error instanceof EngineInputError) return null;
     throw error;

@@ -5,6 +5,7 @@ import type { StepState } from "../flow/walk.ts";
 import { againstUpperLimit, reaches } from "./against-limit.ts";
 import type { Finding, RuleContext } from "./finding.ts";
 import { findingsOf, statedLimit } from "./make-finding.ts";
+import { stepsUpTo } from "./other-steps.ts";
 import { celsius, duration } from "./words.ts";
 
 const make = findingsOf(6, "Bonding material");
@@ -12,14 +13,13 @@ const make = findingsOf(6, "Bonding material");
 /** Hot steps of a bond so far, this one included, its own debond and bond left out. */
 function heatings({ steps, limits }: RuleContext, state: StepState, bond: BondState): StepState[] {
   const face = bondedFace(bond);
-  const made = steps
-    .slice(0, state.number - 1)
+  const soFar = stepsUpTo(steps, state);
+  const made = soFar
+    .slice(0, -1)
     .findLastIndex(
       ({ step, before, after }) => step.kind === "bond" && !bondOn(before.bonds, face) && bondOn(after.bonds, face),
     );
-  return steps
-    .slice(made + 1, state.number)
-    .filter(({ step }) => reaches(step.peakTemperature, limits.heatingFrom.value));
+  return soFar.slice(made + 1).filter(({ step }) => reaches(step.peakTemperature, limits.heatingFrom.value));
 }
 
 /** What the heat of all steps since the bond adds up to, judged at each step that adds to it. */

@@ -7,6 +7,7 @@ import { againstLowerLimit, againstUpperLimit, exceeds } from "./against-limit.t
 import { bondMade } from "./bonded.ts";
 import type { Finding, RuleContext } from "./finding.ts";
 import { findingsOf, siteLimit } from "./make-finding.ts";
+import { earlierSteps } from "./other-steps.ts";
 import { hasBumps } from "./solder.ts";
 import { onTape } from "./tape.ts";
 import { micrometres, percent } from "./words.ts";
@@ -55,7 +56,7 @@ function overDeviceSide(context: RuleContext, state: StepState, cover: Omit<Cove
 
 /** On the back side stands what a via reveal has left standing, by the last step that says how far. */
 function overBackSide(context: RuleContext, state: StepState, cover: Omit<Cover, "feature" | "featureName">) {
-  const earlier = context.steps.slice(0, state.number - 1).map(({ step }) => step);
+  const earlier = earlierSteps(context.steps, state).map(({ step }) => step);
   const feature = earlier.findLast(({ viaProtrusion }) => viaProtrusion)?.viaProtrusion;
   if (feature) return feature.value > 0 ? [against(context, state, { feature, featureName: "Vias", ...cover })] : [];
   if (!earlier.some(({ kind }) => kind === "via reveal")) return [];

@@ -9,6 +9,7 @@ import type { FaceUp, Outcome } from "../vocabulary.ts";
 import { FLAT_WITHIN_UNCERTAINTY, flatWithinUncertainty, outcomeRank } from "../vocabulary.ts";
 import { againstUpperLimit, exceeds } from "./against-limit.ts";
 import type { Finding, Rule, RuleAbout, RuleContext } from "./finding.ts";
+import { previousStep } from "./other-steps.ts";
 import { shareBeyond, sharedBy } from "./share-beyond.ts";
 
 const TITLE = "Warp on the tool";
@@ -23,7 +24,7 @@ interface Moment {
 
 /** As it comes to the tool, as it leaves, and at peak where the tool leaves it free. */
 function moments({ steps, uncertainty }: RuleContext, state: StepState): Moment[] {
-  const previous = steps[state.number - 2];
+  const previous = previousStep(steps, state);
   const own = uncertainty[state.number - 1];
   const found: Moment[] = [];
   if (previous?.atRoom)

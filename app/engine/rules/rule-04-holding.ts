@@ -10,6 +10,7 @@ import { bondLeft, isBonded } from "./bonded.ts";
 import type { Figure, Finding, FindingLimit, Rule, RuleAbout, RuleContext } from "./finding.ts";
 import type { LimitKey, SiteLimits } from "./limits.ts";
 import { findingsOf, siteLimit, statedLimit } from "./make-finding.ts";
+import { previousStep } from "./other-steps.ts";
 import { thinnest } from "./rule-01-thickness.ts";
 import { height, megapascals } from "./words.ts";
 
@@ -28,7 +29,7 @@ interface Loaded {
 
 /** The wafer as it comes to the tool; null when tape or frame holds it flat, and at the first step. */
 function asLoaded({ steps }: RuleContext, state: StepState): Loaded | null {
-  const previous = steps[state.number - 2];
+  const previous = previousStep(steps, state);
   if (!previous?.atRoom) return null;
   return {
     shape: previous.atRoom,

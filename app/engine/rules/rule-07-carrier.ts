@@ -8,6 +8,7 @@ import { againstUpperLimit, exceeds } from "./against-limit.ts";
 import { bondMade, bondsAsked } from "./bonded.ts";
 import type { Finding, Rule, RuleAbout, RuleContext } from "./finding.ts";
 import { findingsOf, siteLimit, statedLimit, temperatureFigure } from "./make-finding.ts";
+import { earlierSteps } from "./other-steps.ts";
 import { releasePath } from "./release-path.ts";
 import { thinnest } from "./rule-01-thickness.ts";
 import { celsius, micrometres, millimetres, wholeMicrometres } from "./words.ts";
@@ -65,9 +66,9 @@ function diameter({ flow }: RuleContext, state: StepState, { carrier }: BondStat
 /** How often a piece has been bonded earlier in the flow: its record does not know of that yet. */
 function bondedEarlier({ steps }: RuleContext, state: StepState, { id, identity }: BondState["carrier"]): number {
   if (!identity) return 0;
-  return steps
-    .slice(0, state.number - 1)
-    .filter(({ step: { bond } }) => bond?.carrier.id === id && bond.carrier.identity === identity).length;
+  return earlierSteps(steps, state).filter(
+    ({ step: { bond } }) => bond?.carrier.id === id && bond.carrier.identity === identity,
+  ).length;
 }
 
 /** A piece that is named is told by its mark; what is said of it holds for the next time that it is bonded. */

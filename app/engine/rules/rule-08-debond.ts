@@ -8,6 +8,7 @@ import { bondLeft, isBonded } from "./bonded.ts";
 import type { Finding, Rule, RuleAbout, RuleContext } from "./finding.ts";
 import { findingsOf, statedLimit, temperatureFigure } from "./make-finding.ts";
 import { staysOn } from "./other-carrier.ts";
+import { earlierSteps } from "./other-steps.ts";
 import { peel } from "./peel.ts";
 import { againstExposures } from "./resistance.ts";
 import { requiredAt, thinnest } from "./rule-01-thickness.ts";
@@ -120,7 +121,7 @@ function slide(state: StepState, { thickness }: BondState): Finding {
 
 /** A remover can dissolve the tape that carries the wafer. */
 function remover({ steps }: RuleContext, state: StepState): Finding[] {
-  const debonded = steps.slice(0, state.number - 1).some(({ step }) => step.kind === "debond");
+  const debonded = earlierSteps(steps, state).some(({ step }) => step.kind === "debond");
   if (!debonded || state.after.mount !== "film frame" || !state.step.exposures.includes("solvent")) return [];
   const found = againstExposures(state.step, state.after.tape?.resistances).find(
     ({ exposure }) => exposure === "solvent",

@@ -6,6 +6,7 @@ import { againstUpperLimit, exceeds } from "./against-limit.ts";
 import { covering } from "./cover.ts";
 import type { Finding, FindingLimit, Rule, RuleAbout, RuleContext } from "./finding.ts";
 import { findingsOf } from "./make-finding.ts";
+import { laterSteps, stepsUpTo } from "./other-steps.ts";
 import { micrometres } from "./words.ts";
 
 const TITLE = "Cover and thickness budget";
@@ -16,7 +17,7 @@ const THINS = ["grind", "stress relief", "polish", "via reveal"];
 /** Whether this step is the last that thins the silicon while it is on this carrier or tape. */
 function isFinalThinning({ steps }: RuleContext, state: StepState): boolean {
   if (!state.step.siliconAfter || !THINS.includes(state.step.kind)) return false;
-  for (const { step } of steps.slice(state.number)) {
+  for (const { step } of laterSteps(steps, state)) {
     if (step.kind === "debond" || step.kind === "mount on frame") return true;
     if (step.siliconAfter && THINS.includes(step.kind)) return false;
   }
@@ -25,10 +26,9 @@ function isFinalThinning({ steps }: RuleContext, state: StepState): boolean {
 
 /** The variation that the thinning since the bond has added: stated at the last step that states one. */
 function grindVariation({ steps }: RuleContext, state: StepState): Measured | null {
-  const bonded = steps
-    .slice(0, state.number)
-    .findLastIndex(({ step }) => step.kind === "bond" || step.kind === "laminate tape");
-  const thinning = steps.slice(bonded + 1, state.number).findLast(({ step }) => step.thicknessVariation);
+  const soFar = stepsUpTo(steps, state);
+  const bonded = soFar.findLastIndex(({ step }) => step.kind === "bond" || step.kind === "laminate tape");
+  const thinning = soFar.slice(bonded + 1).findLast(({ step }) => step.thicknessVariation);
   return thinning?.step.thicknessVariation ?? null;
 }
 

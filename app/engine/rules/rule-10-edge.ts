@@ -2,6 +2,7 @@ import type { StepState } from "../flow/walk.ts";
 import { againstLowerLimit, exceeds, reaches } from "./against-limit.ts";
 import type { Finding, Rule, RuleAbout, RuleContext } from "./finding.ts";
 import { findingsOf, siteLimit } from "./make-finding.ts";
+import { laterSteps } from "./other-steps.ts";
 import { thinnest } from "./rule-01-thickness.ts";
 import { micrometres } from "./words.ts";
 
@@ -86,9 +87,9 @@ function relief({ steps, limits }: RuleContext, state: StepState): Finding[] {
       }),
     ];
   if (kind !== "grind") return [];
-  const next = steps
-    .slice(state.number)
-    .find(({ step }) => step.kind === "grind" || RELIEVES.includes(step.kind) || step.kind === "dice");
+  const next = laterSteps(steps, state).find(
+    ({ step }) => step.kind === "grind" || RELIEVES.includes(step.kind) || step.kind === "dice",
+  );
   if (next && next.step.kind !== "dice") return [];
   const outcome = againstLowerLimit(
     least,

@@ -7,6 +7,7 @@ import { againstUpperLimit, exceeds } from "./against-limit.ts";
 import { BOND_CHECKS, carriersOf, type Check } from "./bond-order.ts";
 import { isBonded } from "./bonded.ts";
 import type { Finding, Rule, RuleAbout, RuleContext } from "./finding.ts";
+import { laterSteps } from "./other-steps.ts";
 import { tapeHeatLimit } from "./tape.ts";
 import { celsius, micrometres as um, millimetres as mm } from "./words.ts";
 
@@ -168,7 +169,7 @@ const CHECKS: Check[] = [
 function cleanAfterDebond({ steps }: RuleContext, state: StepState): Finding | null {
   const released = bondLetGo(state.before, state.step);
   if (!released) return null;
-  const later = steps.slice(state.number);
+  const later = laterSteps(steps, state);
   const next = later.find(({ step }) => !["move", "store", "hold", "measure"].includes(step.kind));
   if (next?.step.kind === "clean") return null;
   return finding(

@@ -69,8 +69,9 @@ function judge({ flow, steps }: RuleContext, state: StepState): Finding[] {
 
 /** The gate is the incoming measurement, else the receipt, else the first step. */
 function gateStep(steps: readonly StepState[]): number {
+  const taken = steps.filter(({ step }) => !step.skipped);
   const incoming =
-    steps.find(({ step }) => step.kind === "measure") ?? steps.find(({ step }) => step.kind === "receive");
+    taken.find(({ step }) => step.kind === "measure") ?? taken.find(({ step }) => step.kind === "receive") ?? taken[0];
   return incoming?.number ?? 1;
 }
 

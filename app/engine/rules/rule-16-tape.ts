@@ -3,6 +3,7 @@ import { ROOM_TEMPERATURE } from "../laminate/layer.ts";
 import { againstUpperLimit, exceeds } from "./against-limit.ts";
 import type { Finding, Rule, RuleAbout, RuleContext } from "./finding.ts";
 import { findingsOf, temperatureFigure } from "./make-finding.ts";
+import { stepsUpTo } from "./other-steps.ts";
 import { againstExposures, type DecidedExposure } from "./resistance.ts";
 import { onTape, tapeHeatLimit, tapeName } from "./tape.ts";
 import { capital, celsius } from "./words.ts";
@@ -30,8 +31,7 @@ function heat({ limits }: RuleContext, state: StepState): Finding[] {
 
 /** Without data of its own a tape goes into no vacuum, and few solvents. The remover after a debond is the debond rule's. */
 function exposures({ steps }: RuleContext, state: StepState): Finding[] {
-  const cleaned =
-    state.step.kind === "clean" && steps.slice(0, state.number).some(({ step }) => step.kind === "debond");
+  const cleaned = state.step.kind === "clean" && stepsUpTo(steps, state).some(({ step }) => step.kind === "debond");
   const elsewhere: DecidedExposure[] = ["ultraviolet light", ...(cleaned ? (["solvent"] as const) : [])];
   const name = capital(tapeName(state.after));
   return againstExposures(state.step, state.after.tape?.resistances, elsewhere).map(({ exposure, outcome, says }) => {

@@ -7,12 +7,16 @@ import { isBonded } from "./bonded.ts";
 import type { Finding, FindingLimit, Rule, RuleAbout, RuleContext } from "./finding.ts";
 import type { LimitKey } from "./limits.ts";
 import { findingsOf, siteLimit, statedLimit } from "./make-finding.ts";
+import { earlierSteps, nextStep, stepsUpTo } from "./other-steps.ts";
 import { capital, duration } from "./words.ts";
 
 const TITLE = "Moisture and clocks";
 const make = findingsOf(17, TITLE);
 
-/** Time from the end of one step to the start of a later one, s; `complete` is false where a time in between is not given. */
+/**
+ * Time from the end of one step to the start of a later one, s; `complete` is false where a time in between is not given. Steps that
+ * the wafer skips count: it waits while the other slots take them.
+ */
 function elapsed(steps: readonly StepState[], from: StepState, to: StepState): { time: number; complete: boolean } {
   const between = steps.slice(from.number, to.number);
   const waits = between.map(({ step }) => step.timeSincePrevious ?? null);
@@ -52,7 +56,7 @@ function lastBefore(
   kind: StepKind,
   instead: readonly StepKind[],
 ): StepState | null {
-  for (const earlier of steps.slice(0, state.number - 1).toReversed()) {
+  for (const earlier of earlierSteps(steps, state).toReversed()) {
     if (earlier.step.kind === kind) return earlier;
     if (instead.includes(earlier.step.kind)) return null;
   }
@@ -104,9 +108,9 @@ function tapeTime(context: RuleContext, state: StepState): Finding[] {
   const { steps, limits } = context;
   const { mount, tape } = state.after;
   if (mount !== "grinding tape" && mount !== "film frame") return [];
-  const next = steps[state.number];
+  const next = nextStep(steps, state);
   if (next && next.after.mount === mount && !PUTS_ON.includes(next.step.kind)) return [];
-  const start = steps.slice(0, state.number).findLast(({ step }) => PUTS_ON.includes(step.kind));
+  const start = stepsUpTo(steps, state).findLast(({ step }) => PUTS_ON.includes(step.kind));
   if (!start || start === state) return [];
   const limit = tape?.longestTime
     ? statedLimit(`${tape.name}, longest time on it`, tape.longestTime, "s")
@@ -128,7 +132,7 @@ const STANDS: StepKind[] = ["store", "hold", "receive", "move"];
 
 /** The step that dried it last, null when it has been wet or stood about since. */
 function driedAt({ steps, limits }: RuleContext, state: StepState): StepState | null {
-  for (const earlier of steps.slice(0, state.number - 1).toReversed()) {
+  for (const earlier of earlierSteps(steps, state).toReversed()) {
     const { step } = earlier;
     if (reaches(step.peakTemperature, limits.dryFrom.value) || step.exposures.includes("vacuum")) return earlier;
     if (WET.some((exposure) => step.exposures.includes(exposure)) || STANDS.includes(step.kind)) return null;

@@ -2,6 +2,7 @@ import type { FilmInput } from "../flow/model.ts";
 import { allFilms, type WaferState } from "../flow/state.ts";
 import type { StepState } from "../flow/walk.ts";
 import type { Measured } from "../measured.ts";
+import { earlierSteps } from "./other-steps.ts";
 
 /** Temperature at which a film's solder melts; null when it has none, or none that is known. */
 export function solderMelting(film: FilmInput): Measured | null {
@@ -23,6 +24,6 @@ export function hasBumps(steps: readonly StepState[], state: StepState): boolean
     state.before.front.some(
       ({ addition: { film } }) => film.kind === "solder" || (film.solderMelting ?? null) !== null,
     ) ||
-    steps.slice(0, state.number - 1).some(({ step }) => step.kind === "reflow")
+    earlierSteps(steps, state).some(({ step }) => step.kind === "reflow")
   );
 }

@@ -66,10 +66,10 @@ export function moved<Item>(items: readonly Item[], { step, to }: { step: number
 }
 
 /** Numbers of the steps that a frame takes over, from the step on: those where nothing else holds the wafer. */
-export function framedSteps(steps: readonly Pick<StepInput, "planned" | "kind">[], from: number): number[] {
+export function framedSteps(steps: readonly Pick<StepInput, "planned" | "kind" | "skipped">[], from: number): number[] {
   const rest = steps.slice(from - 1);
   const end = rest.findIndex(
-    ({ planned, kind }) => !["bare", "thin-wafer gripper"].includes(planned) || kind === "bond",
+    ({ planned, kind, skipped }) => !["bare", "thin-wafer gripper"].includes(planned) || (kind === "bond" && !skipped),
   );
   const length = end < 0 ? rest.length : end;
   return Array.from({ length }, (_, index) => from + index);

@@ -3,6 +3,7 @@ import { initialState } from "../flow/state.ts";
 import { inStep, stepField, takeStep } from "../flow/step.ts";
 import { describeStep, walkFlow, type StepState } from "../flow/walk.ts";
 import type { Finding, Rule, RuleContext } from "../rules/finding.ts";
+import { judgeStep } from "../rules/judge-step.ts";
 import type { SiteLimits } from "../rules/limits.ts";
 import { RULES } from "../rules/rules.ts";
 
@@ -57,5 +58,5 @@ export function trialContext({ flow, steps }: WalkedFlow, limits: SiteLimits): R
 /** What some rules find at all steps of a walked flow, in the order of an assessment. */
 export function judged(walk: WalkedFlow, limits: SiteLimits, rules: readonly Rule[] = RULES): Finding[] {
   const context = trialContext(walk, limits);
-  return walk.steps.flatMap((state) => rules.flatMap((rule) => rule.judge(context, state)));
+  return walk.steps.flatMap((state) => judgeStep(context, state, rules));
 }

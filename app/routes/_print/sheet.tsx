@@ -12,7 +12,7 @@ export const meta: Route.MetaFunction = ({ loaderData }) => [
 export async function loader({ context, params, url }: Route.LoaderArgs) {
   const { result, ...head } = await getAssessment(scopeOf(context), params.assessmentId);
   return {
-    sheet: sheetView(head, result),
+    sheet: sheetView(head, result, url.searchParams.get("leg")),
     paper: paperAskedFor(url.searchParams.get("paper")),
     printedAt: new Date().toISOString(),
   };

@@ -22,7 +22,7 @@ export async function finderOf(
   assessmentId: string | undefined,
   search: URLSearchParams,
 ): Promise<Finder> {
-  const ground = await trialGround(scope, assessmentId);
+  const ground = await trialGround(scope, assessmentId, search);
   const { flow, limits } = ground.input;
   const spans = bondSpans(flow);
   const { asked, target } = readAsked(search, { bonds: spans.length, steps: flow.steps.length });

@@ -1,5 +1,5 @@
 import { answerSentences } from "#app/engine/flow/answer.ts";
-import type { FlowAssessment } from "#app/engine/flow/assess.ts";
+import { inputsCounted, type FlowAssessment } from "#app/engine/flow/assess.ts";
 import { bondedFace, bondOn } from "#app/engine/flow/bond.ts";
 import type { AssessedStep } from "#app/engine/flow/judge.ts";
 import type { FlowInput } from "#app/engine/flow/model.ts";
@@ -10,7 +10,13 @@ import { warpWorking } from "#app/engine/rules/warp-working.ts";
 import { standardBow } from "#app/engine/stoney/bow.ts";
 import type { FaceUp, Side } from "#app/engine/vocabulary.ts";
 import { given } from "#app/lib/given.ts";
-import type { AssessmentResult, BondResult, ShapeResult, StepResult } from "#app/schemas/assessment-result.ts";
+import type {
+  AssessmentResult,
+  BondResult,
+  LegResult,
+  ShapeResult,
+  StepResult,
+} from "#app/schemas/assessment-result.ts";
 
 /** The engine's answer in the form in which it is stored: plain, with the standard bow. */
 export function resultOf(flow: FlowInput, limits: SiteLimits, assessment: FlowAssessment): AssessmentResult {
@@ -25,7 +31,17 @@ export function resultOf(flow: FlowInput, limits: SiteLimits, assessment: FlowAs
     inputs: assessment.inputs,
     bonds: bondsOf(assessment.steps),
     tapeTemperature: limits.tapeTemperature.value,
+    ...given({ slots: assessment.slots ?? flow.leg?.slots, legs: legsOf(limits, assessment) }),
   };
+}
+
+/** Every leg of a flow that parts by slot; the worst stands in the result already. */
+function legsOf(limits: SiteLimits, { legs, slots: worst }: FlowAssessment): LegResult[] | undefined {
+  return legs?.map(({ flow, slots, verdict, steps, findings }) => ({
+    slots,
+    verdict,
+    result: slots === worst ? null : resultOf(flow, limits, { steps, findings, verdict, ...inputsCounted(flow) }),
+  }));
 }
 
 const shownContributions = 6;
@@ -44,7 +60,8 @@ function stepResult({ state, required, outcome, uncertainty, budget }: AssessedS
     peakTemperature: step.peakTemperature,
     holdTime: step.holdTime,
     exposures: step.exposures,
-    ...given({ profile: step.profile, machine: step.machine, recipe: step.recipe }),
+    ...given({ profile: step.profile, machine: step.machine, recipe: step.recipe, slots: step.slots }),
+    ...(step.skipped && { skipped: true as const }),
     equipment: step.equipment && {
       name: step.equipment.name,
       edgesUp: step.equipment.warpLimitEdgesUp?.value ?? null,

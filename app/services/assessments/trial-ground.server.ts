@@ -1,7 +1,10 @@
+import { legFlows } from "#app/engine/flow/legs.ts";
 import type { Catalogue } from "#app/engine/trial/catalogue.ts";
+import { legAnswer } from "#app/lib/assessment-leg.ts";
 import { revisionLetters } from "#app/lib/assessment-revision.ts";
 import { mayInProgram } from "#app/policies/permissions.ts";
 import type { AssessmentInput } from "#app/schemas/assessment-changes.ts";
+import type { AssessmentResult } from "#app/schemas/assessment-result.ts";
 import type { TrialHead, TrialQuestion } from "#app/schemas/trial.ts";
 import { inScope, type ActorScope } from "#app/server/scope.server.ts";
 import { requireInProgram } from "../permission.server.ts";
@@ -17,8 +20,15 @@ export interface TrialGround extends TrialHead {
   programId: string;
 }
 
-/** What trials of an assessment begin from; refused to whom its program is a wall. */
-export async function trialGround(scope: ActorScope, assessmentId: string | undefined): Promise<TrialGround> {
+/**
+ * What trials of an assessment begin from; refused to whom its program is a wall. Of a flow that parts by slot it is the leg that the
+ * address asks for by `leg`, else the worst.
+ */
+export async function trialGround(
+  scope: ActorScope,
+  assessmentId: string | undefined,
+  search: URLSearchParams = new URLSearchParams(),
+): Promise<TrialGround> {
   return inScope(scope, async (em) => {
     const assessment = await findAssessment(em, scope, assessmentId);
     const { id, number, flow, flowName, program, engineVersion, inputHash, input } = assessment;
@@ -27,11 +37,13 @@ export async function trialGround(scope: ActorScope, assessmentId: string | unde
     const may =
       mayInProgram(scope.actor, "edit stacks and flows", program.id) &&
       mayInProgram(scope.actor, "run assessments", program.id);
+    const leg = legOf(assessment.result, search);
     return {
       id,
+      leg,
       revision: revisionLetters(number),
       flow: { id: flow.id, name: flowName },
-      input: input.$,
+      input: leg ? { ...input.$, flow: legFlows(input.$.flow)[leg.number - 1] ?? input.$.flow } : input.$,
       catalogue: await readCatalogue(em),
       barred: may ? (old ? "out of date" : null) : "role",
       mayAssess: mayInProgram(scope.actor, "run assessments", program.id),
@@ -40,9 +52,15 @@ export async function trialGround(scope: ActorScope, assessmentId: string | unde
   });
 }
 
+function legOf(result: AssessmentResult, search: URLSearchParams): TrialHead["leg"] {
+  const { legs } = legAnswer(result, search.get("leg"));
+  return legs && { number: legs.chosen.number, slots: legs.chosen.slots };
+}
+
 /** The part of it that a page shows. */
-export const trialHead = ({ id, revision, flow, barred, mayAssess }: TrialGround): TrialHead => ({
+export const trialHead = ({ id, leg, revision, flow, barred, mayAssess }: TrialGround): TrialHead => ({
   id,
+  leg,
   revision,
   flow,
   barred,
@@ -60,8 +78,12 @@ export const trialQuestion = ({ input: { flow, limits }, catalogue }: TrialGroun
  * The ground of trials for the engine in the browser of somebody who may assess the flow, who is given the same for a what-if; refused
  * to everybody else.
  */
-export async function sentGround(scope: ActorScope, assessmentId: string | undefined): Promise<TrialGround> {
-  const ground = await trialGround(scope, assessmentId);
+export async function sentGround(
+  scope: ActorScope,
+  assessmentId: string | undefined,
+  search: URLSearchParams = new URLSearchParams(),
+): Promise<TrialGround> {
+  const ground = await trialGround(scope, assessmentId, search);
   requireInProgram(scope, "run assessments", ground.programId, "assessment");
   return ground;
 }

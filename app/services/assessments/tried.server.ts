@@ -20,7 +20,7 @@ export async function triedOf(
   assessmentId: string | undefined,
   search: URLSearchParams,
 ): Promise<TriedPageData> {
-  const ground = await trialGround(scope, assessmentId);
+  const ground = await trialGround(scope, assessmentId, search);
   const { flow, limits } = ground.input;
   const posted = search.get("changes") ?? "";
   const changes = readFlowChanges(posted);

@@ -14,7 +14,7 @@ export async function windowOf(
   assessmentId: string | undefined,
   search: URLSearchParams,
 ): Promise<WindowPageData> {
-  const { page, question } = readWindow(await trialGround(scope, assessmentId), search);
+  const { page, question } = readWindow(await trialGround(scope, assessmentId, search), search);
   if (!question) return page;
   try {
     return { ...page, drawing: await inTurns(windowRun(question)) };
@@ -30,7 +30,7 @@ export async function windowAsked(
   assessmentId: string | undefined,
   search: URLSearchParams,
 ): Promise<SentWindow> {
-  return readWindow(await sentGround(scope, assessmentId), search);
+  return readWindow(await sentGround(scope, assessmentId, search), search);
 }
 
 /**

@@ -5,7 +5,8 @@ import { assessmentView, type AssessmentHead } from "#app/lib/assessment-view.ts
 import { movementOf } from "#app/lib/result-comparison.ts";
 import type { OutOfDate } from "#app/schemas/assessment-changes.ts";
 import { attributes, render, words } from "#tests/components/drawings/render.ts";
-import { demoResult, HEAD } from "#tests/fixtures/demo-assessment.ts";
+import { flow, grindStep, step } from "#tests/engine/unit/flow-samples.ts";
+import { assessed, demoResult, HEAD } from "#tests/fixtures/demo-assessment.ts";
 
 interface Shown {
   flow?: string;
@@ -15,9 +16,26 @@ interface Shown {
   refused?: { step: number | null; reason: string };
 }
 
+/** An assessment of a flow that parts by slot, as the server sends it at an address. */
+function partedPage(address: string): string {
+  const result = assessed(
+    flow([
+      step({ title: "Look" }),
+      grindStep(100, 1, { title: "Grind", planned: "bare", slots: [24, 25] }),
+      step({ title: "Look again" }),
+    ]),
+  );
+  const search = new URLSearchParams(address.split("?")[1]);
+  const view = assessmentView(HEAD, result, search.get("step"), search.get("leg"));
+  const Stub = createRoutesStub([
+    { path: "/", Component: () => <AssessmentPage view={view} changed={null} refused={undefined} /> },
+  ]);
+  return render(<Stub initialEntries={[address]} />);
+}
+
 /** The page as the server sends it. */
-function page({ flow = "Petrel", step, head, changed, refused }: Shown = {}): string {
-  const view = assessmentView({ ...HEAD, ...head }, demoResult(flow), step ?? null);
+function page({ flow: name = "Petrel", step: number, head, changed, refused }: Shown = {}): string {
+  const view = assessmentView({ ...HEAD, ...head }, demoResult(name), number ?? null);
   const Stub = createRoutesStub([
     { path: "/", Component: () => <AssessmentPage view={view} changed={changed ?? null} refused={refused} /> },
   ]);
@@ -120,5 +138,20 @@ describe("the assessment page", () => {
     expect(text).toContain("Number TERN-A003");
     expect(text).toContain("razor-sharp");
     expect(text).toContain("Engine 0.2.0, inputs of 2026-12-01 11:10 UTC");
+  });
+});
+
+describe("the page of an assessment whose flow parts by slot", () => {
+  it("lists the legs with their verdicts and marks the one that is looked at, the worst by itself", () => {
+    expect(words(partedPage("/"))).toContain("What follows is of slots 24 and 25");
+    expect(words(partedPage("/?leg=1"))).toContain("What follows is of slots 1 to 23");
+    expect(partedPage("/?leg=1")).toMatch(/aria-current="true"[^>]*>Slots 1 to 23</);
+  });
+
+  it("stays with the leg from step to step, and on the way to its sheet", () => {
+    const html = partedPage("/?leg=1&step=2");
+    expect(html).toContain("?step=3&amp;leg=1#step-3");
+    expect(html).toContain(`/sheets/${HEAD.id}?leg=1`);
+    expect(words(html)).toContain("Only slots 24 and 25 take this step: here the wafer is left as it is.");
   });
 });

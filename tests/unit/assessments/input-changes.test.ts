@@ -31,6 +31,14 @@ describe("what differs between two inputs", () => {
     expect(inputChanges(input(), JSON.parse(JSON.stringify(input())) as AssessmentInput)).toEqual([]);
   });
 
+  it("the slots that take a step, which are all of them where none are named", () => {
+    const changes = changesAfter((now) => {
+      stepOf(now, 3).slots = [1, 2, 3, 7];
+    });
+    expect(changes).toHaveLength(1);
+    expect(changes[0]).toMatchObject({ property: "Slots", from: "all", to: "1 to 3 and 7", steps: [3] });
+  });
+
   it("a film's stress with both values and units, once for all steps that put it down", () => {
     const changes = changesAfter((now) => {
       for (const { film, stress } of now.flow.steps.flatMap(({ adds }) => adds))

@@ -1,9 +1,9 @@
 import { describe, expect, it } from "vitest";
 import { firstStep, selectedStep, stepAskedFor } from "#app/lib/assessment-selected.ts";
-import { demoResult, HEAD } from "#tests/fixtures/demo-assessment.ts";
+import { demoResult, HEAD, PLACE } from "#tests/fixtures/demo-assessment.ts";
 
 const selected = (flow: string, number: number) => {
-  const step = selectedStep(HEAD.id, demoResult(flow), number);
+  const step = selectedStep(PLACE, demoResult(flow), number);
   if (!step) throw new Error(`${flow} has no step ${number}`);
   return step;
 };
@@ -50,7 +50,7 @@ describe("a step in full", () => {
     const result = demoResult("Petrel");
     const said = (remarks: string[] | undefined) => {
       const steps = result.steps.map(({ remarks: _kept, ...step }) => (remarks ? { ...step, remarks } : step));
-      return selectedStep(HEAD.id, { ...result, steps }, 1)?.remarks;
+      return selectedStep(PLACE, { ...result, steps }, 1)?.remarks;
     };
     expect(said(["All of it is taken as film."])).toEqual(["All of it is taken as film."]);
     expect(said(undefined)).toEqual([]);
@@ -83,6 +83,6 @@ describe("a step in full", () => {
   });
 
   it("is nothing for a step that is not there", () => {
-    expect(selectedStep(HEAD.id, demoResult("Tern"), 20)).toBeNull();
+    expect(selectedStep(PLACE, demoResult("Tern"), 20)).toBeNull();
   });
 });

@@ -62,7 +62,10 @@ describe("a change that was tried", () => {
 
 describe("its address", () => {
   it("carries the change and the finding, and reads back the place", () => {
-    const url = new URL(triedPath("id", '[{"quantity":"silicon after"}]', { step: 12, rule: 2 }), "http://localhost");
+    const url = new URL(
+      triedPath({ id: "id", leg: null }, '[{"quantity":"silicon after"}]', { step: 12, rule: 2 }),
+      "http://localhost",
+    );
     expect(url.pathname).toBe("/assessments/id/tried");
     expect(url.searchParams.get("changes")).toBe('[{"quantity":"silicon after"}]');
     expect(placeOfText(url.searchParams.get("at"))).toEqual({ step: 12, rule: 2 });

@@ -2,7 +2,7 @@ import { describe, expect, it } from "vitest";
 import { selectedStep } from "#app/lib/assessment-selected.ts";
 import { assessmentView } from "#app/lib/assessment-view.ts";
 import { figureAskedFor } from "#app/lib/assessment-working.ts";
-import { DEMO_FLOWS, demoResult, HEAD } from "#tests/fixtures/demo-assessment.ts";
+import { DEMO_FLOWS, demoResult, HEAD, PLACE } from "#tests/fixtures/demo-assessment.ts";
 
 const search = (path: string) => new URLSearchParams(path.split("?")[1] ?? "");
 
@@ -10,7 +10,7 @@ describe("the working behind a figure", () => {
   it("is found by every link that an assessment shows", () => {
     for (const flow of DEMO_FLOWS) {
       const result = demoResult(flow);
-      const steps = result.steps.flatMap(({ number }) => selectedStep(HEAD.id, result, number) ?? []);
+      const steps = result.steps.flatMap(({ number }) => selectedStep(PLACE, result, number) ?? []);
       const paths = steps.flatMap(({ lies, peak, released, open, clear }) => [
         lies.working,
         peak?.working ?? null,

@@ -27,6 +27,7 @@ describe("the wafer as a step finds it", () => {
 
   it("is bare silicon before the first step", () => {
     expect(waferBefore(input, 0)).toEqual({
+      slots: null,
       silicon: "725\u00a0±\u00a015\u00a0µm",
       front: [],
       back: [],
@@ -50,6 +51,17 @@ describe("the wafer as a step finds it", () => {
     expect(waferBefore(flow([...steps, step()]), 2)?.on).toBe(
       "device side: Silicon carrier, Adhesive; back side: Silicon carrier, Adhesive",
     );
+  });
+
+  it("is that of the first slots that take the step, where the flow parts by slot", () => {
+    const some = flow([
+      step({ adds: [addition()] }),
+      step({ adds: [addition({ film: film({ id: "c", name: "Cover" }) })], slots: [7, 8] }),
+      step({ slots: [8, 9] }),
+      step(),
+    ]);
+    expect(waferBefore(some, 2)).toMatchObject({ slots: "slot 8", front: ["Cover, 1\u00a0µm", "Film, 1\u00a0µm"] });
+    expect(waferBefore(some, 3)).toMatchObject({ slots: "slots 1 to 6 and 10 to 25", front: ["Film, 1\u00a0µm"] });
   });
 
   it("is not spoken of when a step before leaves no silicon", () => {

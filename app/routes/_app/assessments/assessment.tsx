@@ -17,7 +17,7 @@ export async function loader({ context, params, url }: Route.LoaderArgs) {
   const scope = scopeOf(context);
   const { result, ...head } = await getAssessment(scope, params.assessmentId);
   return {
-    view: assessmentView(head, result, url.searchParams.get("step")),
+    view: assessmentView(head, result, url.searchParams.get("step"), url.searchParams.get("leg")),
     changed: head.outOfDate ? await whatChanged(scope, head.lot?.of.id ?? head.id) : null,
   };
 }

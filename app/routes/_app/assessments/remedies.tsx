@@ -1,5 +1,6 @@
 import { redirect } from "react-router";
 import { RemediesPage, type RemediesPageData } from "#app/components/assessments/RemediesPage.tsx";
+import { trialPath } from "#app/lib/leg-query.ts";
 import { byServer, readSent } from "#app/lib/read-sent.ts";
 import type { SentTrial } from "#app/schemas/trial.ts";
 import { scopeOf } from "#app/server/contexts.server.ts";
@@ -13,8 +14,8 @@ export const meta: Route.MetaFunction = ({ loaderData }) => [
   { title: `What clears it${loaderData ? `, ${loaderData.head.flow.name}` : ""} · Planeward` },
 ];
 
-export async function loader({ context, params }: Route.LoaderArgs): Promise<RemediesPageData> {
-  const ground = await trialGround(scopeOf(context), params.assessmentId);
+export async function loader({ context, params, url }: Route.LoaderArgs): Promise<RemediesPageData> {
+  const ground = await trialGround(scopeOf(context), params.assessmentId, url.searchParams);
   return { head: trialHead(ground), view: await remediesOf(trialQuestion(ground)) };
 }
 
@@ -24,8 +25,9 @@ export async function clientLoader({
   request,
   serverLoader,
 }: Route.ClientLoaderArgs): Promise<RemediesPageData> {
-  if (byServer(new URL(request.url))) return serverLoader();
-  return readSent<SentTrial>(`/assessments/${params.assessmentId}/trial`).catch(() => serverLoader());
+  const url = new URL(request.url);
+  if (byServer(url)) return serverLoader();
+  return readSent<SentTrial>(trialPath(params.assessmentId, url.searchParams.get("leg"))).catch(() => serverLoader());
 }
 
 /** Trying a change on a copy: from here, from the assessment and from the finder. */
