@@ -71,11 +71,9 @@ export function FileItem({ file, known, others, change }: Props) {
       {open && (
         <FileBody
           {...{ id: bodyId, file, known, others, change }}
-          onAnswered={() => {
-            // The question goes with its answer, and the focus with it; the file stays unfolded.
-            setUnfolded(true);
-            heading.current?.focus();
-          }}
+          onChanged={() => setUnfolded(true)}
+          // The question goes with its answer, and the focus would go with it.
+          onAnswered={() => heading.current?.focus()}
         />
       )}
     </li>
@@ -125,13 +123,18 @@ function wordsOf({ outcome, sentence, rows, faults, layout }: Told): string {
 
 interface BodyProps extends Props {
   id: string;
+  /** the file is read anew: it stays unfolded, also when its last question is answered */
+  onChanged: () => void;
   onAnswered: () => void;
 }
 
-function FileBody({ id, file, known, others, change, onAnswered }: BodyProps) {
+function FileBody({ id, file, known, others, change, onChanged, onAnswered }: BodyProps) {
   const { key, told, profile, of } = file;
   const { name } = file.file;
-  const onProfile = (next: ImportProfile) => change({ kind: "profile", key, profile: next });
+  const onProfile = (next: ImportProfile) => {
+    onChanged();
+    change({ kind: "profile", key, profile: next });
+  };
   const layout = told?.layout ?? null;
   const profiles = told?.profiles ?? [];
   return (

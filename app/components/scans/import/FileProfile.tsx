@@ -38,7 +38,7 @@ export function FileProfile({ file, known, others, onProfile, onProfileOfAll }: 
         value={known.find(({ profile }) => JSON.stringify(profile) === JSON.stringify(file.profile))?.id ?? ""}
         onChange={({ currentTarget: { value } }) => onProfile(known.find(({ id }) => id === value)?.profile ?? {})}
       />
-      {reading !== null && file.told?.outcome !== "refused" && (
+      {reading !== null && file.told?.outcome === "read" && (
         <KeepProfile profile={keptProfile(reading, file.profile)} />
       )}
       {others && answered && (

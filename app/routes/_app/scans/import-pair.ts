@@ -16,7 +16,7 @@ export function loader({ context }: Route.LoaderArgs): never {
 
 const WHICH = ["before", "after"] as const;
 /** Fields that each pair has of its own; a fault there is no fault of what the batch shares. */
-const OF_PAIR = ["label", "profileBefore", "profileAfter"];
+const OF_PAIR = /^(?:label|profileBefore|profileAfter)\b/;
 const answer = (said: PairAnswer) => Response.json(said, { status: said.outcome === "stored" ? 201 : 200 });
 
 /** Takes one pair of an import and says what came of it; a refusal is an answer like any other, for its line in the list. */
@@ -34,7 +34,7 @@ export async function action({ request, context }: Route.ActionArgs) {
   const submission = parseForm(formData, scanImportSchema);
   if (submission.status !== "success") {
     const errors = errorsOf(submission.reply().error ?? {});
-    const [own] = OF_PAIR.flatMap((field) => errors[field] ?? []);
+    const [own] = Object.entries(errors).flatMap(([field, said]) => (OF_PAIR.test(field) ? said : []));
     return answer(own === undefined ? { outcome: "fields", errors } : { outcome: "refused", which: null, reason: own });
   }
   const { before, after } = files;
