@@ -2,6 +2,7 @@ import type { SubmissionResult } from "@conform-to/react";
 import { useCallback, useMemo } from "react";
 import { Link } from "react-router";
 import type { Choice } from "#app/components/forms/ChoiceField.tsx";
+import { UnsavedGuard } from "#app/components/forms/UnsavedGuard.tsx";
 import { RunProgress } from "#app/components/ui/RunProgress.tsx";
 import { useInBrowser } from "#app/components/ui/use-in-browser.ts";
 import { MOST_FILES } from "#app/lib/scan-import/batch.ts";
@@ -45,6 +46,7 @@ export function ImportScreen({ programs, films, profiles }: Props) {
     );
   return (
     <>
+      <UnsavedGuard dirty={pairs.length > 0 || sending !== null} />
       <DropZone onFiles={add} passedOver={batch.passedOver} most={MOST_FILES} />
       {begun && (
         <div className="frame mt-4">
