@@ -67,6 +67,8 @@ export default [
     ...prefix("scans", [
       index("routes/_app/scans/list.tsx"),
       route("new", "routes/_app/scans/new.tsx"),
+      route("import", "routes/_app/scans/import.tsx"),
+      route("import/pair", "routes/_app/scans/import-pair.ts"),
       route("files/:fileId", "routes/_app/scans/file.ts"),
       route(":scanId", "routes/_app/scans/scan.tsx"),
     ]),

@@ -1,7 +1,14 @@
 import type { DecimalMark, LengthUnit } from "#app/lib/scan-reading/reading.ts";
 
-/** What a scan was computed with, SI where it is a quantity. */
-export interface ScanParameters {
+/** Units and decimal mark of a file of one profile. */
+export interface FileFormat {
+  positionUnit: LengthUnit;
+  heightUnit: LengthUnit;
+  decimalMark: DecimalMark;
+}
+
+/** What a scan was computed with, SI where it is a quantity; the format is that of the file before the film. */
+export interface ScanParameters extends FileFormat {
   orientation: "100" | "111";
   filmThickness: number;
   filmThicknessTolerance: number | null;
@@ -9,9 +16,6 @@ export interface ScanParameters {
   siliconThicknessTolerance: number | null;
   diameter: number;
   edgeExclusion: number;
-  positionUnit: LengthUnit;
-  heightUnit: LengthUnit;
-  decimalMark: DecimalMark;
 }
 
 /** A row of a file that could not be used: counted from 1 as an editor shows it, with what stood there. */
@@ -39,6 +43,8 @@ export interface FileReading {
   skippedInAll: number;
   /** points that the fit was given in place of those used, each the mean of a stretch; left out when it was given all */
   averagedTo?: number;
+  /** of this file; left out in older readings, where both files had that of the scan */
+  format?: FileFormat;
 }
 
 /** Share of one input in the uncertainty of the stress. `given` is false where nobody stated a tolerance. */

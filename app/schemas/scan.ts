@@ -2,6 +2,7 @@ import { z } from "zod";
 import { DECIMAL_MARKS, LENGTH_UNITS } from "#app/lib/scan-reading/reading.ts";
 import { optionalQuantity, quantity } from "./quantity.ts";
 import { RULES } from "./ranges.ts";
+import type { FileFormat } from "./scan-result.ts";
 
 export const scanSchema = z.object({
   program: z.uuid("Choose the program."),
@@ -33,3 +34,5 @@ export const scanSchema = z.object({
   decimalMark: z.enum(DECIMAL_MARKS, "Choose the decimal mark."),
 });
 export type ScanValues = z.output<typeof scanSchema>;
+/** A scan without how its files are written. */
+export type ScanSubject = Omit<ScanValues, keyof FileFormat>;

@@ -5,7 +5,7 @@ import { siliconBiaxialModulus } from "#app/engine/silicon/biaxial-modulus.ts";
 import { bowFromCurvature, standardBow } from "#app/engine/stoney/bow.ts";
 import type { ReadProfile } from "#app/lib/scan-reading/one-profile.ts";
 import type { ScanContribution, ScanResult } from "#app/schemas/scan-result.ts";
-import type { ScanValues } from "#app/schemas/scan.ts";
+import type { ScanSubject } from "#app/schemas/scan.ts";
 
 /** Relative standard uncertainty of silicon's biaxial modulus (common practice, no source: 0.5 to 1 %). */
 const MODULUS_UNCERTAINTY = 0.01;
@@ -20,7 +20,7 @@ const fromTolerance = (tolerance: number | null) => (tolerance ?? 0) / Math.sqrt
  * Film stress of a pair of profiles, with its uncertainty and the curves to draw.
  * @throws EngineInputError when the scans do not fit each other
  */
-export function scanResult(values: ScanValues, before: ReadProfile, after: ReadProfile): ScanResult {
+export function scanResult(values: ScanSubject, before: ReadProfile, after: ReadProfile): ScanResult {
   const biaxialModulus = siliconBiaxialModulus(values.orientation);
   const film = filmStressFromProfiles({
     pre: before.points,
@@ -88,7 +88,7 @@ function rolled(film: FilmStressFromScans, radius: number): ScanResult["curled"]
 /** The engine's input with the words of this page, and whether its uncertainty was stated. */
 function contribution(
   share: { input: string; contribution: number },
-  { filmThicknessTolerance, siliconThicknessTolerance }: ScanValues,
+  { filmThicknessTolerance, siliconThicknessTolerance }: ScanSubject,
 ): ScanContribution {
   switch (share.input) {
     case "substrate thickness":

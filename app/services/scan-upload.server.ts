@@ -9,8 +9,8 @@ import { excerpt } from "#app/lib/excerpt.ts";
 import { checkOnWafer, checkTogether } from "#app/lib/profile-on-wafer.ts";
 import { readOneProfile, type ReadProfile } from "#app/lib/scan-reading/one-profile.ts";
 import { ScanFileError } from "#app/lib/scan-reading/refusal.ts";
-import type { ScanResult } from "#app/schemas/scan-result.ts";
-import type { ScanValues } from "#app/schemas/scan.ts";
+import type { FileFormat, ScanResult } from "#app/schemas/scan-result.ts";
+import type { ScanSubject, ScanValues } from "#app/schemas/scan.ts";
 import { inScope, type ActorScope } from "#app/server/scope.server.ts";
 import type { UploadedFile } from "#app/server/upload.server.ts";
 import { requireInProgram } from "./permission.server.ts";
@@ -19,18 +19,31 @@ import { scanResult } from "./scan-result-of.ts";
 export type Refused = { outcome: "refused"; field: "before" | "after" | "film" | ""; reason: string };
 export type Uploaded = { outcome: "stored"; id: string } | Refused;
 
-interface ScanFiles {
+export interface ScanFiles {
   before: UploadedFile;
   after: UploadedFile;
 }
+
+/** How each file is read. */
+type ReadAs = (which: "before" | "after", file: UploadedFile) => ReadProfile;
 
 /**
  * Reads two profiles, computes the film's stress and stores raw files, inputs and result in one transaction. A pair that cannot be
  * read or computed leaves nothing behind and comes back with the reason.
  */
 export async function uploadScan(scope: ActorScope, values: ScanValues, files: ScanFiles): Promise<Uploaded> {
+  return uploadReadAs(scope, values, files, (_, file) => readOneProfile(file.bytes, file.name, values));
+}
+
+/** The same where each file says by itself, or by a profile of its own, how it is written. */
+export async function uploadReadAs(
+  scope: ActorScope,
+  values: ScanSubject,
+  files: ScanFiles,
+  readAs: ReadAs,
+): Promise<Uploaded> {
   requireInProgram(scope, "upload scans", values.program, "program");
-  const computed = computeScan(values, files);
+  const computed = computeScan(values, files, readAs);
   if ("outcome" in computed) return computed;
   try {
     return await keepScan(scope, values, files, computed.result);
@@ -41,9 +54,9 @@ export async function uploadScan(scope: ActorScope, values: ScanValues, files: S
   }
 }
 
-function computeScan(values: ScanValues, files: ScanFiles): { result: ScanResult } | Refused {
+function computeScan(values: ScanSubject, files: ScanFiles, readAs: ReadAs): { result: ScanResult } | Refused {
   const read = (which: "before" | "after"): ReadProfile => {
-    const profile = readOneProfile(files[which].bytes, files[which].name, values);
+    const profile = readAs(which, files[which]);
     checkOnWafer(profile, excerpt(files[which].name, 80), values);
     return profile;
   };
@@ -72,7 +85,7 @@ function computeScan(values: ScanValues, files: ScanFiles): { result: ScanResult
 
 const digest = (bytes: Uint8Array) => createHash("sha256").update(bytes).digest("hex");
 
-function keepScan(scope: ActorScope, values: ScanValues, files: ScanFiles, result: ScanResult): Promise<Uploaded> {
+function keepScan(scope: ActorScope, values: ScanSubject, files: ScanFiles, result: ScanResult): Promise<Uploaded> {
   return inScope(scope, async (em): Promise<Uploaded> => {
     const film = values.film ? await em.findOne(Film, { id: values.film }) : null;
     if (values.film && !film)
@@ -85,7 +98,7 @@ function keepScan(scope: ActorScope, values: ScanValues, files: ScanFiles, resul
       film,
       before: await keepFile(em, scope, values.program, files.before),
       after: await keepFile(em, scope, values.program, files.after),
-      parameters,
+      parameters: { ...parameters, ...formatOf(result) },
       result,
       engineVersion: ENGINE_VERSION,
       createdAt: new Date(),
@@ -94,6 +107,11 @@ function keepScan(scope: ActorScope, values: ScanValues, files: ScanFiles, resul
     await em.flush();
     return { outcome: "stored", id: scan.id };
   });
+}
+
+function formatOf({ before }: ScanResult): FileFormat {
+  if (!before.format) throw new Error("a file that was read has a format");
+  return before.format;
 }
 
 /** The same bytes are kept once in a program, under the name they first came with. */

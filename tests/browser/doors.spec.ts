@@ -67,6 +67,8 @@ const DOORS: Record<string, string> = {
   "/carriers/:kind/:recordId/edit": "302 403 403 403 200 403 200",
   "/scans": "302 403 200 200 200 200 403",
   "/scans/new": "302 403 200 200 200 200 403",
+  "/scans/import": "302 403 200 200 200 200 403",
+  "/scans/import/pair": "302 403 404 404 404 404 403",
   "/scans/files/:fileId": "302 404 200 200 200 200 404",
   "/scans/:scanId": "302 404 200 200 200 200 404",
   "/sheets": "302 200 200 200 200 200 200",

@@ -47,7 +47,7 @@ test.describe("a technician", () => {
   test("uploads two scans and gets the film's stress, its curves and the raw files back", async ({ page }) => {
     const label = ownLabel();
     await page.goto("/scans");
-    await page.getByRole("link", { name: "Upload scans" }).click();
+    await page.getByRole("link", { name: "Upload one pair" }).click();
     await fillForm(page, label);
     await fileBefore(page).setInputFiles(BEFORE);
     await fileAfter(page).setInputFiles(AFTER);

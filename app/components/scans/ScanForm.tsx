@@ -9,6 +9,7 @@ import { SubmitButton } from "#app/components/forms/SubmitButton.tsx";
 import { useRecordForm } from "#app/components/forms/use-record-form.ts";
 import { DECIMAL_MARKS, LENGTH_UNITS } from "#app/lib/scan-reading/reading.ts";
 import { FileField } from "./FileField.tsx";
+import { SubjectFields } from "./SubjectFields.tsx";
 
 /** A scan as the text of its form; a file has none. */
 export type ScanFormValues = {
@@ -36,10 +37,6 @@ interface Props {
 }
 
 const UNITS: Choice[] = LENGTH_UNITS.map((unit) => ({ value: unit, label: unit }));
-const ORIENTATIONS: Choice[] = [
-  { value: "100", label: "(100)" },
-  { value: "111", label: "(111)" },
-];
 
 /** Upload of a profile before and one after a film, with what it takes to make a stress of them. */
 export function ScanForm({ programs, films, lastResult }: Props) {
@@ -63,41 +60,7 @@ export function ScanForm({ programs, films, lastResult }: Props) {
           <legend className="float-left mb-3 w-full font-semibold">Wafer and film</legend>
           <div className="clear-both grid gap-x-3 gap-y-2 tablet:grid-cols-2">
             <LineField field={fields.label} label="Wafer" hint="As written on it, for example M-0388" />
-            <ChoiceField field={fields.program} label="Program" choices={programs} blank="Choose" />
-            <ChoiceField
-              field={fields.film}
-              label="Film, to compare with the library"
-              choices={films}
-              blank="None of the library"
-              className="tablet:col-span-2"
-            />
-            <QuantityField
-              field={fields.filmThickness}
-              label="Film thickness"
-              dimension="length"
-              example="5 µm"
-              hint="Of the film between the two scans"
-            />
-            <QuantityField
-              field={fields.filmThicknessTolerance}
-              label="Tolerance, ±"
-              dimension="length"
-              hint="Half-width; blank: not known"
-            />
-            <QuantityField
-              field={fields.siliconThickness}
-              label="Silicon thickness"
-              dimension="length"
-              example="725 µm"
-            />
-            <QuantityField
-              field={fields.siliconThicknessTolerance}
-              label="Tolerance, ±"
-              dimension="length"
-              hint="Half-width; blank: not known"
-            />
-            <QuantityField field={fields.diameter} label="Diameter" dimension="length" example="200 mm" />
-            <ChoiceField field={fields.orientation} label="Orientation of the silicon" choices={ORIENTATIONS} />
+            <SubjectFields fields={fields} programs={programs} films={films} />
           </div>
         </fieldset>
         <fieldset className="min-w-0 border-ink p-4 max-wide:border-t tablet:p-6 wide:border-l">

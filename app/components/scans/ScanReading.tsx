@@ -2,14 +2,7 @@ import { fileSize } from "#app/lib/file-size.ts";
 import { formatQuantity } from "#app/engine/units/format.ts";
 import type { FileReading, ScanParameters } from "#app/schemas/scan-result.ts";
 import type { ScanFileView } from "#app/schemas/scan-view.ts";
-
-const DELIMITERS: Record<string, string> = {
-  ",": "commas",
-  ";": "semicolons",
-  "\t": "tabs",
-  "|": "upright bars",
-  " ": "blanks",
-};
+import { DELIMITER_WORDS } from "./delimiter-words.ts";
 
 interface Props {
   which: "before" | "after";
@@ -21,6 +14,7 @@ interface Props {
 /** How one file was read, what of it could not be, and the file itself. */
 export function ScanReading({ which, file, reading, parameters }: Props) {
   const { rows, used, columns, heading, delimiter, skipped, skippedInAll, averagedTo } = reading;
+  const { decimalMark, positionUnit, heightUnit } = reading.format ?? parameters;
   const [position, height] = reading.readColumns ?? [0, 1];
   const mm = (metres: number) => formatQuantity(metres, "length", { unit: "mm" });
   return (
@@ -35,7 +29,7 @@ export function ScanReading({ which, file, reading, parameters }: Props) {
         <span className="text-quiet">{fileSize(file.size)}, as it came</span>
       </p>
       <p className="mt-1 text-quiet">
-        {`${used} of ${rows} rows read, ${mm(reading.from)} to ${mm(reading.to)}. ${DELIMITERS[delimiter] ? `Split at ${DELIMITERS[delimiter]}` : `Split at “${delimiter}”`}, decimal ${parameters.decimalMark}; position in ${parameters.positionUnit}, height in ${parameters.heightUnit}. `}
+        {`${used} of ${rows} rows read, ${mm(reading.from)} to ${mm(reading.to)}. ${DELIMITER_WORDS[delimiter] ? `Split at ${DELIMITER_WORDS[delimiter]}` : `Split at “${delimiter}”`}, decimal ${decimalMark}; position in ${positionUnit}, height in ${heightUnit}. `}
         {heading ? `Heading “${heading}”.` : "No heading."}
         {(columns > 2 || position > height) &&
           ` Of ${columns} columns, column ${position + 1} was read as the position and column ${height + 1} as the height.`}

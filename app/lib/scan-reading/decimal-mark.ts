@@ -34,7 +34,10 @@ export function marksOf(split: Split, stated: { decimalMark?: DecimalMark; thous
     return {
       decimalMark: null,
       thousands: grouped,
-      ambiguity: question("decimal mark", proved.sentence, ["point", "comma"]),
+      ambiguity: {
+        ...question("decimal mark", proved.sentence, ["point", "comma"]),
+        ...(proved.shown === undefined ? {} : { shown: proved.shown }),
+      },
     };
   const other = mark === "point" ? seen["either comma"] : seen["either point"];
   const groupSign: Thousands = mark === "point" ? "comma" : "point";
@@ -69,7 +72,7 @@ const question = (what: Ambiguity["what"], sentence: string, choices: string[]):
 });
 
 /** The mark that is proved, nothing when no number has one, or why it is open. */
-function settled(seen: Seen, { delimiter, quoted }: Split): DecimalMark | null | { sentence: string } {
+function settled(seen: Seen, { delimiter, quoted }: Split): DecimalMark | null | { sentence: string; shown?: string } {
   if (seen.point && seen.comma)
     return {
       sentence: `row ${seen.point.row} holds “${seen.point.text}” and row ${seen.comma.row} “${seen.comma.text}”: the file has both decimal points and decimal commas.`,
@@ -79,7 +82,7 @@ function settled(seen: Seen, { delimiter, quoted }: Split): DecimalMark | null |
   // Unquoted cells between commas hold no decimal commas, so their points are decimal.
   if (seen["either point"] && !seen["either comma"] && delimiter === "," && !quoted) return "point";
   const open = seen["either comma"] ?? seen["either point"];
-  return open ? { sentence: `row ${open.row} holds “${open.text}”: ${bothWays(open.text)}.` } : null;
+  return open ? { sentence: `row ${open.row} holds “${open.text}”: ${bothWays(open.text)}.`, shown: open.text } : null;
 }
 
 function bothWays(text: string): string {

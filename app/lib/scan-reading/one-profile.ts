@@ -1,10 +1,10 @@
 import type { ProfilePoint } from "#app/engine/profile/points.ts";
 import { excerpt } from "#app/lib/excerpt.ts";
 import type { ImportProfile } from "#app/schemas/import-profile.ts";
-import type { FileReading, SkippedRow } from "#app/schemas/scan-result.ts";
+import type { FileFormat, FileReading, SkippedRow } from "#app/schemas/scan-result.ts";
 import { profilePoints } from "./profile-points.ts";
 import type { FileProfile, ProfileFile } from "./profile-rows.ts";
-import type { DecimalMark, LengthUnit, Reading } from "./reading.ts";
+import { LENGTH_UNITS, type Reading } from "./reading.ts";
 import { ScanFileError } from "./refusal.ts";
 import { readScanFile, type ScanRead } from "./scan-reader.ts";
 
@@ -14,13 +14,6 @@ export interface ReadProfile {
   reading: FileReading;
 }
 
-/** What a person has stated of a file of one profile. */
-export interface StatedFormat {
-  positionUnit: LengthUnit;
-  heightUnit: LengthUnit;
-  decimalMark: DecimalMark;
-}
-
 const LONGEST_HEAD = 80;
 
 /**
@@ -28,7 +21,7 @@ const LONGEST_HEAD = 80;
  * columns; without heads, and where their numbers do not tell them either, they are the first two.
  * @throws ScanFileError with a sentence that says what is wrong, where, and what to do
  */
-export function readOneProfile(bytes: Uint8Array, fileName: string, stated: StatedFormat): ReadProfile {
+export function readOneProfile(bytes: Uint8Array, fileName: string, stated: FileFormat): ReadProfile {
   const name = excerpt(fileName, LONGEST_HEAD);
   const { positionUnit, heightUnit, decimalMark } = stated;
   const profile: ImportProfile = { decimalMark, units: { position: positionUnit, height: heightUnit } };
@@ -40,6 +33,18 @@ export function readOneProfile(bytes: Uint8Array, fileName: string, stated: Stat
     ];
     read = readScanFile(bytes, fileName, { ...profile, columns });
   }
+  return onlyProfile(read, name);
+}
+
+/**
+ * Reads a file that holds one profile as an import profile says; what the profile leaves out is told by the file.
+ * @throws ScanFileError with a sentence that says what is wrong, or still open, where, and what to do
+ */
+export function readProfileBy(bytes: Uint8Array, fileName: string, profile: ImportProfile): ReadProfile {
+  return onlyProfile(readScanFile(bytes, fileName, profile), excerpt(fileName, LONGEST_HEAD));
+}
+
+function onlyProfile(read: ScanRead, name: string): ReadProfile {
   const { kind, ambiguities } = read.reading;
   if (kind !== "profiles")
     throw new ScanFileError(`${name} is a ${kind}, not a profile. Choose the scan, position and height in a row.`);
@@ -68,6 +73,7 @@ function isOnlyUnheaded({ outcome, reading }: ScanRead): boolean {
 
 function fileReading(reading: Reading, content: ProfileFile, profile: FileProfile, points: number): FileReading {
   const { position, height, x, from, to } = profile;
+  const unitAt = (column: number) => LENGTH_UNITS.find((unit) => unit === reading.columns[column]?.unit) ?? "m";
   const heads = [position, height].map((column) => reading.columns[column]?.heading ?? "");
   const skipped = content.faults
     .flatMap(({ places }) => places)
@@ -85,5 +91,11 @@ function fileReading(reading: Reading, content: ProfileFile, profile: FileProfil
     skipped,
     skippedInAll: content.faulty,
     ...(points < x.length ? { averagedTo: points } : {}),
+    // A file without any mark reads the same under either.
+    format: {
+      positionUnit: unitAt(position),
+      heightUnit: unitAt(height),
+      decimalMark: reading.decimalMark ?? "point",
+    },
   };
 }

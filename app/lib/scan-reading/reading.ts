@@ -93,6 +93,8 @@ export interface Ambiguity {
   chosen: null;
   /** whether nothing can be read before it is answered */
   blocks: boolean;
+  /** the number that may be read in two ways, where one is in question */
+  shown?: string;
   /** what is open and by what evidence, a whole sentence without the file's name */
   sentence: string;
 }

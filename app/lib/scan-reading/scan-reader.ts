@@ -32,6 +32,8 @@ export interface ScanReader {
    */
   push(bytes: Uint8Array): boolean;
   end(): ScanRead;
+  /** how the file was understood so far, also where its content is refused; null while that is not told */
+  layout(): Layout | null;
 }
 
 /**
@@ -79,6 +81,7 @@ export function scanReader(fileName: string, profile: ImportProfile = {}): ScanR
         takeText(decoding.push(bytes.subarray(at, at + PIECE)));
       return asked === null;
     },
+    layout: () => running?.layout ?? asked,
     end() {
       if (asked === null) {
         if (bytesSeen === 0) throw new ScanFileError(emptySentence(name));

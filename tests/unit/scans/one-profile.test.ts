@@ -1,11 +1,12 @@
 import { readFileSync } from "node:fs";
 import { describe, expect, it } from "vitest";
 import { monitorProfile, profileCsv, type CsvStyle } from "#app/db/seeders/demo-monitor.ts";
-import { readOneProfile, type StatedFormat } from "#app/lib/scan-reading/one-profile.ts";
+import { readOneProfile } from "#app/lib/scan-reading/one-profile.ts";
+import type { FileFormat } from "#app/schemas/scan-result.ts";
 import { ScanFileError } from "#app/lib/scan-reading/refusal.ts";
 
-const POINT: StatedFormat = { positionUnit: "mm", heightUnit: "µm", decimalMark: "point" };
-const COMMA: StatedFormat = { ...POINT, decimalMark: "comma" };
+const POINT: FileFormat = { positionUnit: "mm", heightUnit: "µm", decimalMark: "point" };
+const COMMA: FileFormat = { ...POINT, decimalMark: "comma" };
 const POINTS = monitorProfile("after");
 
 const bytes = (text: string) => new TextEncoder().encode(text);
@@ -28,7 +29,7 @@ const rows = (count: number, row = (n: number) => `${n}.5,${n}.25`) =>
   Array.from({ length: count }, (_, n) => row(n)).join("\n");
 
 describe("a file of one profile, units and decimal mark stated", () => {
-  it.each<[name: string, text: string, format: StatedFormat, delimiter: string]>([
+  it.each<[name: string, text: string, format: FileFormat, delimiter: string]>([
     ["commas and points", styled({}), POINT, ","],
     ["semicolons and decimal commas", styled({ delimiter: ";", decimalComma: true }), COMMA, ";"],
     ["tabs and decimal commas", styled({ delimiter: "\t", decimalComma: true }), COMMA, "\t"],
@@ -47,7 +48,7 @@ describe("a file of one profile, units and decimal mark stated", () => {
   });
 
   it("other units, Å and inch too", () => {
-    const format: StatedFormat = { positionUnit: "inch", heightUnit: "Å", decimalMark: "point" };
+    const format: FileFormat = { positionUnit: "inch", heightUnit: "Å", decimalMark: "point" };
     const { points } = read(
       styled({ head: ["x (in),z (A)"], positionPerMetre: 1e4 / 254, heightPerMetre: 1e10 }),
       format,

@@ -29,9 +29,14 @@ export default function Scans({ loaderData }: Route.ComponentProps) {
   const { page, programs, mayUpload } = loaderData;
   const searched = page.params.query !== "" || Object.values(page.params.filters).some(Boolean);
   const upload = mayUpload && (
-    <Link to="/scans/new" className="btn btn-primary">
-      Upload scans
-    </Link>
+    <>
+      <Link to="/scans/new" className="btn">
+        Upload one pair
+      </Link>
+      <Link to="/scans/import" className="btn btn-primary">
+        Import scans
+      </Link>
+    </>
   );
   // One filled button a page: where nothing is there yet it stands with the words that say what belongs here.
   const empty = page.total === 0 && !searched;

@@ -1,0 +1,50 @@
+import { getFormProps, type SubmissionResult } from "@conform-to/react";
+import { FormHead } from "#app/components/forms/FormHead.tsx";
+import { QuantityField } from "#app/components/forms/QuantityField.tsx";
+import type { Choice } from "#app/components/forms/ChoiceField.tsx";
+import { useRecordForm } from "#app/components/forms/use-record-form.ts";
+import type { ScanFormValues } from "../ScanForm.tsx";
+import { SubjectFields } from "../SubjectFields.tsx";
+
+interface Props {
+  id: string;
+  programs: Choice[];
+  films: Choice[];
+  /** what the server found wrong, by field */
+  lastResult: SubmissionResult<string[]> | null;
+  onImport: (shared: FormData) => void;
+}
+
+type Shared = Omit<ScanFormValues, "label" | "before" | "after" | "positionUnit" | "heightUnit" | "decimalMark">;
+
+/** What all pairs of a batch share. */
+export function BatchForm({ id, programs, films, lastResult, onImport }: Props) {
+  const [only] = programs.length === 1 ? programs : [];
+  const [form, fields] = useRecordForm<Shared>({
+    id,
+    lastResult,
+    defaultValue: { program: only?.value ?? "", orientation: "100", edgeExclusion: "5 mm" },
+  });
+  return (
+    <form
+      {...getFormProps(form)}
+      className="border-t border-ink p-4 tablet:px-6"
+      onSubmit={(event) => {
+        event.preventDefault();
+        onImport(new FormData(event.currentTarget));
+      }}
+    >
+      <FormHead lastResult={lastResult} />
+      <h2 className="mb-3 font-semibold">The same for all pairs of this batch</h2>
+      <div className="grid gap-x-3 gap-y-2 tablet:grid-cols-2 wide:grid-cols-4">
+        <QuantityField
+          field={fields.edgeExclusion}
+          label="Rim left out"
+          dimension="length"
+          hint="At either end of the scan"
+        />
+        <SubjectFields fields={fields} programs={programs} films={films} />
+      </div>
+    </form>
+  );
+}
