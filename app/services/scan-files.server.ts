@@ -1,7 +1,8 @@
 import { createHash, randomUUID } from "node:crypto";
 import type { EntityManager } from "@mikro-orm/postgresql";
 import { ScanFile } from "#app/db/entities/scan-file.ts";
-import type { ActorScope } from "#app/server/scope.server.ts";
+import { notFound } from "#app/server/problem.server.ts";
+import { inScope, type ActorScope } from "#app/server/scope.server.ts";
 import type { UploadedFile } from "#app/server/upload.server.ts";
 
 /** SHA-256, hex. */
@@ -29,4 +30,19 @@ export async function keepScanFile(
   });
   await em.flush();
   return kept;
+}
+
+/**
+ * So many bytes of a stored file from a place on, fewer at its end.
+ * @throws 404 for a file that is not there or of another program
+ */
+export function scanFilePiece(scope: ActorScope, id: string, from: number, length: number): Promise<Uint8Array> {
+  return inScope(scope, async (em) => {
+    const [row] = await em.execute<{ piece: Uint8Array }[]>(
+      "select substring(bytes from ? for ?) as piece from scan_file where id = ?",
+      [from + 1, length, id],
+    );
+    if (!row) throw notFound("scan file");
+    return row.piece;
+  });
 }

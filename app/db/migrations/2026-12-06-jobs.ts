@@ -29,6 +29,8 @@ export class Jobs extends Migration {
       this.addSql(
         `alter table "${table}" add constraint "${table}_${column}_foreign" foreign key ("${column}") references "${other}" ("id") on update cascade`,
       );
+    // Not compressed, so that a piece of a large file is read without all that stands before it.
+    this.addSql(`alter table "scan_file" alter column "bytes" set storage external`);
     for (const table of ["job", "scan_reading"]) {
       this.addSql(`alter table "${table}" enable row level security`);
       this.addSql(
@@ -43,6 +45,7 @@ export class Jobs extends Migration {
   }
 
   override down(): void {
+    this.addSql(`alter table "scan_file" alter column "bytes" set storage extended`);
     this.addSql(`drop table "job" cascade`);
     this.addSql(`drop table "scan_reading" cascade`);
     this.addSql(`drop function app_at_work()`);

@@ -10,6 +10,7 @@ import { inScope, type ActorScope } from "#app/server/scope.server.ts";
 import { JobRefused, type Tell } from "../jobs/progress.server.ts";
 import type { Worked } from "../jobs/run-job.server.ts";
 import { requireInProgram } from "../permission.server.ts";
+import { scanFilePiece } from "../scan-files.server.ts";
 import { keepReading, knownReading } from "./keep-reading.server.ts";
 import { fileRefusal } from "./refusal-sentence.ts";
 
@@ -58,17 +59,17 @@ async function readStored(
   tell: Tell,
 ): Promise<{ outcome: "read" | "already read"; reading: string } | { outcome: "refused"; reason: string }> {
   const stored = await inScope(scope, async (em) => {
-    const file = await em.findOne(ScanFile, { id }, { populate: ["bytes"] });
+    const file = await em.findOne(ScanFile, { id });
     if (!file) throw notFound("scan file");
     requireInProgram(scope, "upload scans", file.program.id, "scan file");
     const known = await knownReading(em, id, settings);
-    return { program: file.program.id, name: file.name, bytes: file.bytes.get(), known };
+    return { program: file.program.id, name: file.name, size: file.size, known };
   });
-  const { program, name, bytes, known } = stored;
+  const { program, known } = stored;
   if (known !== null) return { outcome: "already read", reading: known };
   let result: ScanReadingResult;
   try {
-    result = await readInPieces(bytes, name, settings, tell);
+    result = await readInPieces(scope, { id, ...stored }, settings, tell);
   } catch (error) {
     const reason = fileRefusal(error);
     if (reason === null) throw error;
@@ -88,16 +89,17 @@ async function readStored(
   }
 }
 
+/** The text of a large file never exists all together: its bytes come from the database piece by piece. */
 async function readInPieces(
-  bytes: Uint8Array,
-  name: string,
+  scope: ActorScope,
+  { id, name, size }: { id: string; name: string; size: number },
   { profile, edgeExclusion }: ReadingSettings,
   tell: Tell,
 ): Promise<ScanReadingResult> {
   const reader = scanReader(name, profile);
-  for (let at = 0; at < bytes.length; at += PIECE) {
-    if (!reader.push(bytes.subarray(at, at + PIECE))) break;
-    await tell(Math.min(at + PIECE, bytes.length));
+  for (let at = 0; at < size; at += PIECE) {
+    if (!reader.push(await scanFilePiece(scope, id, at, PIECE))) break;
+    await tell(Math.min(at + PIECE, size));
   }
   return readingFigures(name, reader.end(), edgeExclusion);
 }
