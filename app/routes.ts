@@ -5,7 +5,12 @@ export default [
   route("readyz", "routes/readyz.ts"),
   layout("routes/_public/layout.tsx", [route("sign-in", "routes/_public/sign-in.tsx")]),
   route("sign-out", "routes/_auth/sign-out.ts"),
-  ...prefix("api/v1", [route("estimates", "routes/api.v1/estimates.ts")]),
+  ...prefix("api/v1", [
+    route("estimates", "routes/api.v1/estimates.ts"),
+    route("scans", "routes/api.v1/scans.ts"),
+    route("scans/:readingId", "routes/api.v1/scan.ts"),
+    route("jobs/:jobId", "routes/api.v1/job.ts"),
+  ]),
   layout("routes/_print/layout.tsx", [
     route("sheets/:assessmentId", "routes/_print/sheet.tsx"),
     route("assessments/change-request/print", "routes/_print/change-request.tsx"),
@@ -72,6 +77,7 @@ export default [
       route("files/:fileId", "routes/_app/scans/file.ts"),
       route(":scanId", "routes/_app/scans/scan.tsx"),
     ]),
+    route("jobs", "routes/_app/jobs.tsx"),
     route("sheets", "routes/_app/sheets/list.tsx"),
     route("method", "routes/_app/method.tsx"),
     route("*", "routes/_app/nowhere.tsx"),

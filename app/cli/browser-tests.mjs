@@ -12,6 +12,7 @@ import { Sentence } from "./sentence.mjs";
 import { serveBuild } from "./server.mjs";
 import { tallyPlaywright } from "./tally.mjs";
 import { accessTo, templateName } from "./test-database.mjs";
+import { keepWorker } from "./worker.mjs";
 
 /** Debian's browser: Playwright does not bring one of its own here. */
 const chromium = "/usr/bin/chromium";
@@ -31,7 +32,9 @@ async function serveForTests({ keeper, env }, { folder, database, accountsFile }
   await prepareDatabase(keeper, access, { accountsFile, env });
   const port = await freePort();
   const logFile = join(folder, "server.log");
-  await serveBuild(keeper, { port, logFile, env: { ...env, DATABASE_URL: access.appUrl } });
+  const served = { ...env, DATABASE_URL: access.appUrl };
+  await serveBuild(keeper, { port, logFile, env: served });
+  keepWorker(keeper, { env: { ...served, NODE_ENV: "production" }, logFile: join(folder, "worker.log") });
   return { port, logFile, ownerUrl: access.ownerUrl };
 }
 

@@ -22,10 +22,12 @@ import { makeOwnFolder, ownFolder } from "./project.mjs";
 import { stopRecorded } from "./run-record.mjs";
 import { Sentence, printFailure } from "./sentence.mjs";
 import { serveBuild, serveSources } from "./server.mjs";
+import { keepWorker } from "./worker.mjs";
 
 const isDev = process.argv.includes("--dev");
 const accountsFile = join(ownFolder, "demo-accounts.json");
 const serverLog = join(ownFolder, "server.log");
+const workerLog = join(ownFolder, "worker.log");
 const databaseLog = join(ownFolder, "postgres.log");
 
 /** What this process is doing, for whoever starts the same copy a second time. */
@@ -72,6 +74,8 @@ async function run(keeper, { port, external }) {
   const server = isDev
     ? await serveSources(keeper, { port, env })
     : await serveBuild(keeper, { port, env, logFile: serverLog });
+  const mode = isDev ? "development" : "production";
+  keepWorker(keeper, { env: { ...env, NODE_ENV: mode }, ...(!isDev && { logFile: workerLog }) });
 
   const address = `http://${loopback}:${port}`;
   doing = `runs at ${address}`;

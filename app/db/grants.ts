@@ -1,8 +1,8 @@
 /**
  * What the plain role may do, table by table; run after every migration, so that a new table without a line here is a table
- * that the application cannot touch. Audit, assessments, raw files and revisions of a flow can only be added.
+ * that the application cannot touch. Audit, assessments, raw files, their readings and revisions of a flow can only be added.
  */
-const ADD_ONLY = ["assessment", "scan_file", "audit_event", "flow_revision"];
+const ADD_ONLY = ["assessment", "scan_file", "audit_event", "flow_revision", "scan_reading"];
 const READ_AND_WRITE = [
   "person",
   "credential",
@@ -26,6 +26,7 @@ const READ_AND_WRITE = [
   "flow_template",
   "import_profile",
   "scan",
+  "job",
 ];
 
 /** SQL that gives the role its rights and nothing more. */

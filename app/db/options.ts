@@ -3,6 +3,7 @@ import { defineConfig, UnderscoreNamingStrategy } from "@mikro-orm/postgresql";
 import { SeedManager } from "@mikro-orm/seeder";
 import { AuditSubscriber } from "#app/server/audit.server.ts";
 import { entities } from "./entities/entities.ts";
+import { QUEUE_SCHEMA } from "./queue-schema.ts";
 import { migrations } from "./migrations/migrations.ts";
 
 /** How the ORM talks to a database; the same for the server, migrations, seeds and tests. */
@@ -25,6 +26,7 @@ export function databaseOptions(clientUrl: string) {
       disableForeignKeys: false,
       allOrNothing: true,
     },
+    schemaGenerator: { ignoreSchema: [QUEUE_SCHEMA] },
     // Unscoped work on the shared manager is always a mistake here.
     allowGlobalContext: false,
     debug: false,

@@ -3,13 +3,14 @@ import { readFile, writeFile } from "node:fs/promises";
 import { MikroORM } from "@mikro-orm/postgresql";
 import { z } from "zod";
 import { grantStatements } from "./grants.ts";
+import { prepareQueue } from "./queue.ts";
 import { databaseOptions } from "./options.ts";
 import { createDemoAccounts, demoAccountsSchema, setDemoPasswords } from "./seeders/demo-accounts.ts";
 import { DemoSeeder } from "./seeders/demo-seeder.ts";
 import { ReferenceSeeder } from "./seeders/reference-seeder.ts";
 
 /**
- * Brings a database up to date before the server starts: migrations, rights of the plain role, reference data, and demo data
+ * Brings a database up to date before the server starts: migrations, rights of the plain role, the queue of jobs, reference data, and demo data
  * when asked and nobody is there yet. Run as its own process with the owner's connection.
  */
 const environment = z
@@ -25,6 +26,7 @@ const orm = await MikroORM.init(databaseOptions(environment.DATABASE_OWNER_URL))
 try {
   await orm.migrator.up();
   for (const statement of grantStatements(environment.APP_ROLE)) await orm.em.fork().getConnection().execute(statement);
+  await prepareQueue(orm, environment.DATABASE_OWNER_URL, environment.APP_ROLE);
   await orm.seeder.seed(ReferenceSeeder);
   if (environment.DEMO === "1" && environment.DEMO_ACCOUNTS_FILE) await prepareDemo(environment.DEMO_ACCOUNTS_FILE);
 } finally {

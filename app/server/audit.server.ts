@@ -45,6 +45,7 @@ const SUBJECTS: Record<string, string> = {
   ImportProfile: "import profile",
   ScanFile: "scan file",
   Scan: "scan",
+  ScanReading: "scan reading",
 };
 
 /** Columns that say nothing to a reader, or that must not be copied. */

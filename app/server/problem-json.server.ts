@@ -1,13 +1,15 @@
-import type { EstimateFault } from "#app/schemas/estimate.ts";
+import { refusedSentence, refusedStatus } from "./problem.server.ts";
 
 const TITLES = {
   400: "The request could not be read",
   401: "Please sign in",
   403: "That is not yours to ask",
+  404: "There is nothing here",
   405: "That cannot be done here",
+  406: "It cannot be given in that form",
   413: "The request is too large",
   415: "The request has the wrong content type",
-  422: "The request cannot be estimated",
+  422: "What was sent cannot be used",
 } as const;
 
 /** Refusals that the API knows. */
@@ -17,11 +19,19 @@ export type ProblemStatus = keyof typeof TITLES;
 export function problemJson(
   status: ProblemStatus,
   detail: string,
-  { errors, headers }: { errors?: EstimateFault[]; headers?: Record<string, string> } = {},
+  { errors, headers }: { errors?: object[]; headers?: Record<string, string> } = {},
 ): Response {
   const body = { type: "about:blank", title: TITLES[status], status, detail, ...(errors && { errors }) };
   return new Response(JSON.stringify(body), {
     status,
     headers: { "Content-Type": "application/problem+json", ...headers },
   });
+}
+
+/** A refusal that a service has thrown, as the API gives it; anything else is thrown on. */
+export function problemJsonOf(error: unknown): Response {
+  const detail = refusedSentence(error);
+  const status = refusedStatus(error);
+  if (detail === null || status === null || !(status in TITLES)) throw error;
+  return problemJson(status as ProblemStatus, detail);
 }

@@ -8,6 +8,8 @@ export interface Scope {
   personId: string | null;
   /** true only for the few queries that find out who is asking */
   atTheDoor?: boolean;
+  /** true only where the worker takes a job up and notes how far it is */
+  atWork?: boolean;
   requestId: string;
 }
 
@@ -28,7 +30,7 @@ export async function tellPerson(em: EntityManager, personId: string | null): Pr
  */
 export async function inScope<T>(scope: Scope | ActorScope, work: (em: EntityManager) => Promise<T>): Promise<T> {
   const personId = "actor" in scope ? scope.actor.id : scope.personId;
-  const door = "actor" in scope ? "" : scope.atTheDoor ? "sign-in" : "";
+  const door = doorOf(scope);
   const { em: shared } = await orm();
   const em = shared.fork({ clear: true });
   return em.transactional(async (transaction) => {
@@ -37,4 +39,10 @@ export async function inScope<T>(scope: Scope | ActorScope, work: (em: EntityMan
     noteScope(transaction, { personId, requestId: scope.requestId });
     return work(transaction as EntityManager);
   });
+}
+
+function doorOf(scope: Scope | ActorScope): string {
+  if ("actor" in scope) return "";
+  if (scope.atTheDoor) return "sign-in";
+  return scope.atWork ? "worker" : "";
 }

@@ -21,6 +21,19 @@ export async function listImportProfiles(scope: ActorScope): Promise<ImportProfi
 }
 
 /**
+ * The import profile of one instrument.
+ * @throws 403 for a role that may not, 404 when the id names nothing
+ */
+export async function getImportProfile(scope: ActorScope, id: string): Promise<ImportProfileValues["profile"]> {
+  requireOnSite(scope, "keep import profiles");
+  return inScope(scope, async (em) => {
+    const record = await em.findOne(ImportProfile, { id: idFrom(id, "import profile") });
+    if (!record) throw notFound("import profile");
+    return record.profile;
+  });
+}
+
+/**
  * Keeps an instrument's import profile, or changes it. A name that another has, and a version that is no longer current, are
  * answered and nothing is written.
  * @throws 403 for a role that may not, 404 when the id names nothing

@@ -1,7 +1,6 @@
-import { createHash, randomUUID } from "node:crypto";
-import { UniqueConstraintViolationException, type EntityManager } from "@mikro-orm/postgresql";
+import { randomUUID } from "node:crypto";
+import { UniqueConstraintViolationException } from "@mikro-orm/postgresql";
 import { Film } from "#app/db/entities/film.ts";
-import { ScanFile } from "#app/db/entities/scan-file.ts";
 import { Scan } from "#app/db/entities/scan.ts";
 import { EngineInputError } from "#app/engine/errors.ts";
 import { ENGINE_VERSION } from "#app/engine/version.ts";
@@ -14,6 +13,7 @@ import type { ScanSubject, ScanValues } from "#app/schemas/scan.ts";
 import { inScope, type ActorScope } from "#app/server/scope.server.ts";
 import type { UploadedFile } from "#app/server/upload.server.ts";
 import { requireInProgram } from "./permission.server.ts";
+import { keepScanFile, sha256 } from "./scan-files.server.ts";
 import { scanResult } from "./scan-result-of.ts";
 
 export type Refused = { outcome: "refused"; field: "before" | "after" | "film" | ""; reason: string };
@@ -64,7 +64,7 @@ function computeScan(values: ScanSubject, files: ScanFiles, readAs: ReadAs): { r
   try {
     const before = read("before");
     reading = "after";
-    if (digest(files.before.bytes) === digest(files.after.bytes))
+    if (sha256(files.before.bytes) === sha256(files.after.bytes))
       throw new ScanFileError(
         `${excerpt(files.after.name, 80)} holds the same bytes as the file before the film. Choose the scan after it.`,
       );
@@ -83,8 +83,6 @@ function computeScan(values: ScanSubject, files: ScanFiles, readAs: ReadAs): { r
   }
 }
 
-const digest = (bytes: Uint8Array) => createHash("sha256").update(bytes).digest("hex");
-
 function keepScan(scope: ActorScope, values: ScanSubject, files: ScanFiles, result: ScanResult): Promise<Uploaded> {
   return inScope(scope, async (em): Promise<Uploaded> => {
     const film = values.film ? await em.findOne(Film, { id: values.film }) : null;
@@ -96,8 +94,8 @@ function keepScan(scope: ActorScope, values: ScanSubject, files: ScanFiles, resu
       program: values.program,
       label: values.label,
       film,
-      before: await keepFile(em, scope, values.program, files.before),
-      after: await keepFile(em, scope, values.program, files.after),
+      before: await keepScanFile(em, scope, values.program, files.before),
+      after: await keepScanFile(em, scope, values.program, files.after),
       parameters: { ...parameters, ...formatOf(result) },
       result,
       engineVersion: ENGINE_VERSION,
@@ -112,28 +110,4 @@ function keepScan(scope: ActorScope, values: ScanSubject, files: ScanFiles, resu
 function formatOf({ before }: ScanResult): FileFormat {
   if (!before.format) throw new Error("a file that was read has a format");
   return before.format;
-}
-
-/** The same bytes are kept once in a program, under the name they first came with. */
-async function keepFile(
-  em: EntityManager,
-  scope: ActorScope,
-  programId: string,
-  file: UploadedFile,
-): Promise<ScanFile> {
-  const hash = digest(file.bytes);
-  const known = await em.findOne(ScanFile, { program: programId, hash });
-  if (known) return known;
-  const kept = em.create(ScanFile, {
-    id: randomUUID(),
-    program: programId,
-    name: file.name,
-    hash,
-    size: file.bytes.length,
-    bytes: Buffer.from(file.bytes),
-    createdAt: new Date(),
-    createdBy: scope.actor.id,
-  });
-  await em.flush();
-  return kept;
 }

@@ -1,8 +1,8 @@
 import { createHash, randomBytes, randomUUID } from "node:crypto";
-import { Membership } from "#app/db/entities/membership.ts";
 import { Session } from "#app/db/entities/session.ts";
 import type { Actor } from "#app/policies/roles.ts";
-import { inScope, tellPerson } from "#app/server/scope.server.ts";
+import { inScope } from "#app/server/scope.server.ts";
+import { actorOf } from "./actor.server.ts";
 
 const MINUTE = 60_000;
 /** A session ends after this long without use, and after this long whatever happens. */
@@ -72,25 +72,9 @@ export async function resumeSession(
       renewed = { token: next, expiresAt: session.expiresAt };
     }
     if (session.lastSeenAt.getTime() + NOTE_USE_AFTER <= now) session.lastSeenAt = new Date(now);
-    await tellPerson(em, session.person.id);
-    const memberships = await em.find(Membership, { person: session.person.id }, { populate: ["program"] });
+    const actor = await actorOf(em, session.person);
     await em.flush();
-    const { id, name, email, siteRole } = session.person;
-    return {
-      actor: {
-        id,
-        name,
-        email,
-        siteRole: siteRole ?? null,
-        memberships: memberships.map(({ program, role }) => ({
-          programId: program.id,
-          programName: program.name,
-          programSlug: program.slug,
-          role,
-        })),
-      },
-      renewed,
-    };
+    return { actor, renewed };
   });
 }
 

@@ -4,12 +4,22 @@ import { MikroORM } from "@mikro-orm/postgresql";
 import type { APIRequestContext } from "@playwright/test";
 import { databaseOptions } from "#app/db/options.ts";
 import { TERN } from "./flow-pages.ts";
+import { longProfile } from "./long-profile.ts";
 
 /** What stands for the parameters of an address, by their names in the table of routes. */
 export type DoorIds = Record<string, string>;
 
 /** Parameters that name something of one program; every other one names something of the whole site. */
-export const WALLED: readonly string[] = ["flowId", "stepId", "assessmentId", "stackId", "scanId", "fileId"];
+export const WALLED: readonly string[] = [
+  "flowId",
+  "stepId",
+  "assessmentId",
+  "stackId",
+  "scanId",
+  "fileId",
+  "readingId",
+  "jobId",
+];
 
 type Query = <Row>(sql: string, params?: unknown[]) => Promise<Row[]>;
 
@@ -82,7 +92,11 @@ export async function ternIds(engineer: APIRequestContext): Promise<DoorIds> {
     },
   });
   const fileId = await asOwner((query) => idOf(query, "select before_id as id from scan where id = ?", [scanId]));
-  return { ...known, assessmentId, scanId, fileId, kind: "carriers", "*": "nowhere/at/all" };
+  const readingId = await added("/api/v1/scans", {
+    multipart: { program: "tern", file: fixture("monitor-200mm-725um-before-film-seed-7.csv") },
+  });
+  const jobId = await added("/api/v1/scans", { multipart: { program: "tern", file: longProfile("door.csv", 60_000) } });
+  return { ...known, assessmentId, scanId, fileId, readingId, jobId, kind: "carriers", "*": "nowhere/at/all" };
 }
 
 /** Copies of the same rows in a program of their own, to which nobody belongs. */
@@ -112,6 +126,8 @@ export function strangeIds(own: DoorIds): Promise<DoorIds> {
       stepId: await copy("flow_step", own["stepId"], { flow_id: flowId }),
       assessmentId: await copy("assessment", own["assessmentId"], { flow_id: flowId }),
       stackId: await copy("stack", own["stackId"]),
+      readingId: await copy("scan_reading", own["readingId"], { file_id: fileId }),
+      jobId: await copy("job", own["jobId"]),
       scanId: await copy("scan", own["scanId"], { before_id: fileId, after_id: fileId }),
     };
   });

@@ -24,6 +24,9 @@ const DOORS: Record<string, string> = {
   "/sign-in": "200 302 302 302 302 302 302",
   "/sign-out": "302 302 302 302 302 302 302",
   "/api/v1/estimates": "405 405 405 405 405 405 405",
+  "/api/v1/scans": "405 405 405 405 405 405 405",
+  "/api/v1/scans/:readingId": "401 404 200 200 200 200 404",
+  "/api/v1/jobs/:jobId": "401 404 200 200 200 200 404",
   "/sheets/:assessmentId": "302 404 200 200 200 200 404",
   "/": "302 200 200 200 200 200 200",
   "/films": "302 403 200 200 200 200 200",
@@ -71,6 +74,7 @@ const DOORS: Record<string, string> = {
   "/scans/import/pair": "302 403 404 404 404 404 403",
   "/scans/files/:fileId": "302 404 200 200 200 200 404",
   "/scans/:scanId": "302 404 200 200 200 200 404",
+  "/jobs": "302 403 200 200 200 200 403",
   "/sheets": "302 200 200 200 200 200 200",
   "/method": "302 200 200 200 200 200 200",
   "/*": "302 404 404 404 404 404 404",
@@ -154,7 +158,8 @@ for (const [column, role] of VISITORS.entries())
     test("gets nothing of a program that is not their own, and no word that it exists", async ({ baseURL }) => {
       const context = await visitor(role, baseURL);
       const asked = Object.keys(DOORS).filter((address) => WALLED.some((name) => address.includes(`:${name}`)));
-      const expected = Object.fromEntries(asked.map((address) => [address, role === "nobody" ? "302" : "404"]));
+      const refused = (address: string) => (role !== "nobody" ? "404" : address.startsWith("/api/") ? "401" : "302");
+      const expected = Object.fromEntries(asked.map((address) => [address, refused(address)]));
       expect(await answers(context, strange, asked)).toEqual(expected);
       const { stepId = "" } = strange;
       const step = "/flows/:flowId/steps/:stepId";

@@ -52,6 +52,15 @@ const account = { role: APP_ROLE + " of demo " + DEMO, email: "engineer@kestrel-
 if (!existsSync(String(DEMO_ACCOUNTS_FILE))) writeFileSync(String(DEMO_ACCOUNTS_FILE), JSON.stringify([account]));
 `;
 
+/** The worker's stand-in: says which connection it was given, then waits to be stopped. */
+const worker = `
+import { appendFileSync } from "node:fs";
+const { DATABASE_URL, DATABASE_OWNER_URL, NODE_ENV } = process.env;
+appendFileSync("workers.log", JSON.stringify({ role: new URL(DATABASE_URL).username, DATABASE_OWNER_URL, NODE_ENV }) + "\\n");
+const waiting = setInterval(() => undefined, 1000);
+process.once("SIGTERM", () => clearInterval(waiting));
+`;
+
 /** A small project in a temporary folder, blank in its name, that the real commands set up, serve and test. */
 export class StubProject {
   readonly folder = join(mkdtempSync(join(tmpdir(), "planeward-cli-")), "a project");
@@ -65,6 +74,7 @@ export class StubProject {
     this.write("node_modules/.package-lock.json", JSON.stringify({ packages: {} }));
     symlinkSync(join(realRoot, "node_modules/tsx"), join(this.folder, "node_modules/tsx"));
     this.write("app/db/prepare.ts", prepare);
+    this.write("app/jobs/worker.ts", worker);
     this.program("react-router", bundler);
     this.program("react-router-serve", server);
   }

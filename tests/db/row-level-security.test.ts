@@ -15,6 +15,8 @@ const PROGRAM_TABLES = [
   "assessment",
   "scan_file",
   "scan",
+  "scan_reading",
+  "job",
 ];
 const SITE_TABLES = [
   "film",

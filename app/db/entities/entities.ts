@@ -12,11 +12,13 @@ import { FlowStep } from "./flow-step.ts";
 import { FlowStepFilm } from "./flow-step-film.ts";
 import { FlowTemplate } from "./flow-template.ts";
 import { ImportProfile } from "./import-profile.ts";
+import { Job } from "./job.ts";
 import { Membership } from "./membership.ts";
 import { Person } from "./person.ts";
 import { Program } from "./program.ts";
 import { Scan } from "./scan.ts";
 import { ScanFile } from "./scan-file.ts";
+import { ScanReading } from "./scan-reading.ts";
 import { Session } from "./session.ts";
 import { Silicon } from "./silicon.ts";
 import { SiteLimit } from "./site-limit.ts";
@@ -52,5 +54,7 @@ export const entities = [
   ImportProfile,
   ScanFile,
   Scan,
+  ScanReading,
+  Job,
   AuditEvent,
 ];

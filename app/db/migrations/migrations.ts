@@ -11,6 +11,7 @@ import { CarrierPieceVariation } from "./2026-12-06-carrier-piece-variation.ts";
 import { DebondFace } from "./2026-12-06-debond-face.ts";
 import { CarrierExpansionCurve } from "./2026-12-06-carrier-expansion-curve.ts";
 import { FilmLines } from "./2026-12-06-film-lines.ts";
+import { Jobs } from "./2026-12-06-jobs.ts";
 import { Tapes } from "./2026-12-06-tapes.ts";
 
 /** Every migration in the order in which it runs. */
@@ -29,4 +30,5 @@ export const migrations = [
   { name: "2026-12-06-film-lines", class: FilmLines },
   { name: "2026-12-06-carrier-expansion-curve", class: CarrierExpansionCurve },
   { name: "2026-12-06-tapes", class: Tapes },
+  { name: "2026-12-06-jobs", class: Jobs },
 ];

@@ -43,7 +43,18 @@ export default function Scans({ loaderData }: Route.ComponentProps) {
   const counted = page.total === 1 ? "1 scan" : `${page.total} scans`;
   return (
     <>
-      <PageHead title="Scans" remark={searched ? `${page.total} found` : counted} actions={!empty && upload} />
+      <PageHead
+        title="Scans"
+        remark={searched ? `${page.total} found` : counted}
+        actions={
+          <>
+            <Link to="/jobs" className="btn">
+              Work under way
+            </Link>
+            {!empty && upload}
+          </>
+        }
+      />
       <ListHead what="wafers, films and people" filters={[{ name: "program", label: "Program", options: programs }]} />
       {page.rows.length > 0 ? (
         <>

@@ -1,0 +1,19 @@
+import type { ReadProfileFigures } from "#app/schemas/scan-reading.ts";
+
+/**
+ * Profiles as a file that is read back without a question and without a change, to the last bit: positions and heights in metres,
+ * a pair of columns each, blank where one profile is longer than the other.
+ */
+export function profilesCsv(profiles: ReadProfileFigures[]): string {
+  const heads = profiles.flatMap(({ along }, n) => [
+    `${along === "radius" ? "Radius" : "Position"} ${n + 1} [m]`,
+    `Height ${n + 1} [m]`,
+  ]);
+  const rows = Math.max(0, ...profiles.map(({ x }) => x.length));
+  const lines = Array.from({ length: rows }, (_, row) =>
+    profiles.map(({ x, z }) => `${cell(x[row])},${cell(z[row])}`).join(","),
+  );
+  return [heads.join(","), ...lines].map((line) => `${line}\r\n`).join("");
+}
+
+const cell = (value: number | undefined) => (value === undefined ? "" : String(value));

@@ -1,0 +1,71 @@
+import { jobJson } from "#app/lib/job-json.ts";
+import { mayInProgram } from "#app/policies/permissions.ts";
+import { scanRequestSchema } from "#app/schemas/scan-request.ts";
+import { actorContext, scopeOf } from "#app/server/contexts.server.ts";
+import { problemJson, problemJsonOf } from "#app/server/problem-json.server.ts";
+import type { ActorScope } from "#app/server/scope.server.ts";
+import { readUpload } from "#app/server/upload.server.ts";
+import { getImportProfile } from "#app/services/import-profiles.server.ts";
+import { getJob } from "#app/services/jobs/jobs.server.ts";
+import { getReading } from "#app/services/scan-readings/get-reading.server.ts";
+import { importScanFiles } from "#app/services/scan-readings/import-files.server.ts";
+import { scanAnswer } from "./scan-answer.server.ts";
+import type { Route } from "./+types/scans";
+
+/** Two million rows of position and height have some 40 MB. */
+const LARGEST = { bytes: 48 * 1024 * 1024, words: "48\u00A0MB" };
+
+const onlyPost = () => problemJson(405, "Send a POST.", { headers: { Allow: "POST" } });
+
+export const loader = onlyPost;
+
+/**
+ * Takes a file in (multipart/form-data: `file`, `program`, and `import_profile` as JSON or `import_profile_id`). 201 with what the file
+ * says, 200 with the same when it has been read in that way before, 202 with the job that reads a large one.
+ */
+export async function action({ request, context }: Route.ActionArgs) {
+  if (request.method !== "POST") return onlyPost();
+  if (!context.get(actorContext)) return problemJson(401, "Sign in first; the session cookie is what counts here.");
+  if (!/^multipart\/form-data/i.test(request.headers.get("Content-Type") ?? ""))
+    return problemJson(415, "Send multipart/form-data with the file in the field “file”.");
+  try {
+    return await answer(scopeOf(context), request);
+  } catch (error) {
+    return problemJsonOf(error);
+  }
+}
+
+async function answer(scope: ActorScope, request: Request): Promise<Response> {
+  const { formData, files, tooLarge } = await readUpload(request, ["file"], LARGEST);
+  const { file } = files;
+  if (tooLarge.file) return problemJson(413, `A file may have up to ${LARGEST.words}.`);
+  const parsed = scanRequestSchema.safeParse(Object.fromEntries(formData));
+  const faults = (parsed.error?.issues ?? []).map(({ path, message }) => ({
+    pointer: `/${path.join("/")}`,
+    detail: message,
+  }));
+  if (!file) faults.unshift({ pointer: "/file", detail: "Send the file in the field “file”." });
+  if (!parsed.success || !file) return problemJson(422, "Something in the request is wrong.", { errors: faults });
+
+  const { program: slug, edge_exclusion_m: edgeExclusion, import_profile, import_profile_id } = parsed.data;
+  const program = scope.actor.memberships.find(({ programSlug }) => programSlug === slug);
+  if (!program || !mayInProgram(scope.actor, "see the work", program.programId))
+    return problemJson(404, `There is no program “${slug}”, or it is not yours.`);
+  const profile = import_profile ?? (import_profile_id ? await getImportProfile(scope, import_profile_id) : {});
+  const imported = await importScanFiles(scope, {
+    program: program.programId,
+    files: [file],
+    settings: { profile, edgeExclusion },
+  });
+  switch (imported.outcome) {
+    case "refused":
+      return problemJson(422, imported.reason, { errors: imported.faults });
+    case "job":
+      return Response.json(jobJson(await getJob(scope, imported.job)), {
+        status: 202,
+        headers: { Location: `/api/v1/jobs/${imported.job}`, "Cache-Control": "no-store" },
+      });
+    default:
+      return scanAnswer(request, await getReading(scope, imported.reading), imported.outcome === "read" ? 201 : 200);
+  }
+}

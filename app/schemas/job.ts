@@ -1,0 +1,43 @@
+import type { ReadingSettings } from "./scan-reading.ts";
+
+export const JOB_STATES = ["waiting", "running", "done", "failed", "stopped"] as const;
+export type JobState = (typeof JOB_STATES)[number];
+
+/** What each kind of job is given and what it leaves behind. */
+export interface JobKinds {
+  "scan files": {
+    input: { files: { id: string; name: string; size: number }[]; settings: ReadingSettings };
+    outcome: { files: FileOutcome[] };
+  };
+}
+export type JobKind = keyof JobKinds;
+export type JobInput = JobKinds[JobKind]["input"];
+export type JobOutcome = JobKinds[JobKind]["outcome"];
+
+/** How a file of a batch went. */
+export type FileOutcome = { file: string; name: string } & (
+  | { outcome: "read"; reading: string }
+  | { outcome: "already read"; reading: string }
+  | { outcome: "refused"; reason: string }
+);
+
+/** A job as a page shows it. */
+export interface JobRow {
+  id: string;
+  kind: JobKind;
+  title: string;
+  program: string;
+  state: JobState;
+  done: number;
+  total: number;
+  unit: string;
+  sentence: string;
+  stopAsked: boolean;
+  outcome: JobOutcome | null;
+  createdAt: string;
+  createdBy: string;
+  startedAt: string | null;
+  endedAt: string | null;
+  /** whether the person who looks may stop it or start it again */
+  mayChange: boolean;
+}

@@ -1,0 +1,48 @@
+import { createHash, randomUUID } from "node:crypto";
+import type { EntityManager } from "@mikro-orm/postgresql";
+import { ScanFile } from "#app/db/entities/scan-file.ts";
+import { notFound } from "#app/server/problem.server.ts";
+import { inScope, type ActorScope } from "#app/server/scope.server.ts";
+import type { UploadedFile } from "#app/server/upload.server.ts";
+
+/** SHA-256, hex. */
+export const sha256 = (content: Uint8Array | string): string => createHash("sha256").update(content).digest("hex");
+
+/** The same bytes are kept once in a program, under the name they first came with. */
+export async function keepScanFile(
+  em: EntityManager,
+  scope: ActorScope,
+  programId: string,
+  file: UploadedFile,
+): Promise<ScanFile> {
+  const hash = sha256(file.bytes);
+  const known = await em.findOne(ScanFile, { program: programId, hash });
+  if (known) return known;
+  const kept = em.create(ScanFile, {
+    id: randomUUID(),
+    program: programId,
+    name: file.name,
+    hash,
+    size: file.bytes.length,
+    bytes: Buffer.from(file.bytes),
+    createdAt: new Date(),
+    createdBy: scope.actor.id,
+  });
+  await em.flush();
+  return kept;
+}
+
+/**
+ * So many bytes of a stored file from a place on, fewer at its end.
+ * @throws 404 for a file that is not there or of another program
+ */
+export function scanFilePiece(scope: ActorScope, id: string, from: number, length: number): Promise<Uint8Array> {
+  return inScope(scope, async (em) => {
+    const [row] = await em.execute<{ piece: Uint8Array }[]>(
+      "select substring(bytes from ? for ?) as piece from scan_file where id = ?",
+      [from + 1, length, id],
+    );
+    if (!row) throw notFound("scan file");
+    return row.piece;
+  });
+}
