@@ -7,7 +7,7 @@ import { celsius, micrometres } from "./assessment-figure.ts";
 import { bySeverity, findingNote } from "./assessment-finding.ts";
 import { liesWord, shapeText } from "./assessment-shape.ts";
 import { formatBare, withoutUnit } from "./format-measured.ts";
-import { BOTH_CARRIERS } from "./flow-rows.ts";
+import { BOTH_CARRIERS } from "./plan-along.ts";
 import { isRolled, lyingAs } from "./lying-as.ts";
 import { SHORT_STEP_NAMES } from "./step-names.ts";
 

@@ -23,6 +23,7 @@ export const BLANK_HANDLING: StepHandlingValues = {
   sideUp: null,
   machine: null,
   recipe: null,
+  slots: null,
   carrierPiece: null,
   tapeName: null,
   tapeTemperatureLimit: null,

@@ -1,4 +1,5 @@
 import { spansOfKinds } from "#app/engine/finder/bond-spans.ts";
+import { slotsServed, takes } from "#app/engine/flow/legs.ts";
 import { FINDER_NOTE } from "#app/engine/finder/with-bond.ts";
 import type { Catalogue } from "#app/engine/trial/catalogue.ts";
 import { FRAME_TITLE, framedSteps, moved, REMEDY_NOTE, type FlowChange } from "#app/engine/trial/change.ts";
@@ -20,9 +21,19 @@ export interface PlanContext {
   /** stress in force of the film that a step (from 1) adds as its nth (from 0): its own, else the film's */
   stressOf: (step: number, film: number) => Measured | null;
   newId: () => string;
+  /** a slot of the leg that the change was tried on; missing where the flow does not part by slot */
+  slot?: number | undefined;
 }
 
 const LONGEST_TITLE = 120;
+
+/** Marks the steps that the wafer of a slot does not take. */
+const onLeg =
+  (slot: number | undefined) =>
+  (step: StepPlan): StepPlan & { skipped: boolean } => ({
+    ...step,
+    skipped: slot !== undefined && !takes(step.handling, slot),
+  });
 
 /** A plan with one change. */
 export function planWith(plan: FlowPlan, change: FlowChange, context: PlanContext): FlowPlan {
@@ -84,9 +95,11 @@ function withFilm(step: StepPlan, { film }: { film: number }, change: (film: Fil
 function withFrame(
   steps: StepPlan[],
   { step, tool }: Extract<FlowChange, { quantity: "frame" }>,
-  { newId }: PlanContext,
+  { newId, slot }: PlanContext,
 ): StepPlan[] {
-  const framed = new Set(framedSteps(steps, step));
+  const taken = steps.map(onLeg(slot));
+  const framed = new Set(framedSteps(taken, step).filter((number) => !taken[number - 1]?.skipped));
+  const slots = slotsServed(steps.flatMap(({ handling }, index) => (framed.has(index + 1) ? handling : [])));
   const mount: StepPlan = {
     ...BLANK_STEP,
     id: newId(),
@@ -94,6 +107,7 @@ function withFrame(
     title: FRAME_TITLE,
     planned: "film frame",
     equipment: tool,
+    handling: { ...BLANK_STEP.handling, slots },
   };
   return steps
     .map((each, index): StepPlan => (framed.has(index + 1) ? { ...each, planned: "film frame" } : each))
@@ -103,7 +117,7 @@ function withFrame(
 function rebonded(
   steps: StepPlan[],
   change: Extract<FlowChange, { quantity: "bond" }>,
-  { catalogue }: PlanContext,
+  { catalogue, slot }: PlanContext,
 ): StepPlan[] {
   const bond = steps[change.step - 1];
   const nameOf = (list: readonly { id: string; name: string }[], id: string | null) =>
@@ -132,9 +146,10 @@ function rebonded(
       : tried(otherMaterial ? null : bond.bondThickness, change.thickness, FINDER_NOTE),
     handling: sameLayer ? made.handling : { ...made.handling, bondThicknessVariation: null },
   };
-  const span = spansOfKinds(steps.map(({ kind, handling }) => ({ kind, ...handling }))).find(
-    ({ from }) => from === change.step,
-  );
+  const taken = steps.map(onLeg(slot));
+  const span = spansOfKinds(
+    taken.map(({ kind, handling, skipped }) => ({ ...handling, kind: skipped ? null : kind })),
+  ).find(({ from }) => from === change.step);
   return steps.map((step, index) => {
     if (index + 1 === change.step) return next;
     if (index + 1 !== span?.to || !otherMaterial) return step;

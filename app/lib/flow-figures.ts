@@ -10,6 +10,8 @@ interface Flow {
   thinnest: Measured | null;
   hottest: number | null;
   rows: readonly unknown[];
+  /** the slots of each leg, in words; empty where every wafer takes every step */
+  legs: readonly string[];
 }
 
 const silicon = (measured: Measured) => `${siliconText(measured)}\u00A0µm`;
@@ -24,7 +26,7 @@ function comesIn(incoming: Measured, bow: Flow["incomingBow"]): string {
 }
 
 /** The figures that say what kind of flow this is, each with its unit. */
-export function flowFigures({ silicon: wafer, incoming, incomingBow, thinnest, hottest, rows }: Flow) {
+export function flowFigures({ silicon: wafer, incoming, incomingBow, thinnest, hottest, rows, legs }: Flow) {
   return [
     { label: "Silicon", value: wafer.name },
     { label: "Comes in at", value: comesIn(incoming, incomingBow) },
@@ -34,5 +36,6 @@ export function flowFigures({ silicon: wafer, incoming, incomingBow, thinnest, h
       value: hottest === null ? "no steps yet" : formatQuantity(hottest, "temperature", { unit: "°C" }),
     },
     { label: "Steps", value: String(rows.length) },
+    ...(legs.length > 0 ? [{ label: "Parts by slot into", value: legs.join("; ") }] : []),
   ];
 }

@@ -62,8 +62,8 @@ export function stepHandlingOf(handling: StepHandlingValues, tape: TapeInput | n
 }
 
 /** How the step is run: what its form keeps beside the handling, as the engine takes it. */
-export function stepRunOf({ profile, sideUp, machine, recipe }: StepHandlingValues): Partial<StepInput> {
-  return given({ profile, sideUp, machine, recipe });
+export function stepRunOf({ profile, sideUp, machine, recipe, slots }: StepHandlingValues): Partial<StepInput> {
+  return given({ profile, sideUp, machine, recipe, slots });
 }
 
 /** What is given of the bond that a step makes. */

@@ -1,4 +1,4 @@
-import { spansOfKinds } from "#app/engine/finder/bond-spans.ts";
+import { slotsInWords } from "#app/engine/flow/legs.ts";
 import type { StepKind } from "#app/engine/flow/model.ts";
 import type { Measured } from "#app/engine/measured.ts";
 import type { FilmLines } from "#app/engine/patterned/pattern.ts";
@@ -10,6 +10,7 @@ import { filmCutWords } from "./film-cut.ts";
 import { holdWords, runWords } from "./run-words.ts";
 import { filmThicknessText, siliconText } from "./flow-thickness.ts";
 import { formatBare } from "./format-measured.ts";
+import { planAlong, type OnCarrier } from "./plan-along.ts";
 
 /** A step as the step table needs it; a stored step and a proposed one both have this. */
 export interface ShownStep {
@@ -30,7 +31,9 @@ export interface ShownStep {
   carrier: { name: string; identity?: string | null } | null;
   bondingMaterial: { name: string } | null;
   bondThickness: Measured | null;
-  handling?: Partial<Pick<StepHandlingValues, "machine" | "recipe" | "sideUp" | "profile" | "bondFace" | "debondFace">>;
+  handling?: Partial<
+    Pick<StepHandlingValues, "machine" | "recipe" | "sideUp" | "profile" | "bondFace" | "debondFace" | "slots">
+  >;
   films: {
     change: "adds" | "removes";
     side: Side;
@@ -52,7 +55,9 @@ export interface StepRow {
   peak: string;
   /** with its unit; null when it does not matter */
   minutes: string | null;
-  /** µm, without the unit */
+  /** 'slots 1 to 12' where only those take the step; null for every wafer */
+  slots: string | null;
+  /** µm, without the unit; joined by 'or' where wafers that take the step come to it unlike */
   silicon: { text: string; changed: boolean };
   tool: string | null;
   /** which of several tools and by which recipe: 'oven 3, recipe PI-5'; null when neither is said */
@@ -88,10 +93,10 @@ function filmChange({ change, side, film, thickness, coverage, lines }: ShownSte
   return { word: change, what: parts.filter(Boolean).join(", "), side: SIDE_NAMES[side] };
 }
 
-/** `before`: the carriers that the wafer comes on. */
+/** `before`: the carriers that the wafer comes on, of one that comes on them in several ways each of those. */
 function changesOf(
   { kind, films, trimWidth, trimDepth, handling }: ShownStep,
-  before: readonly OnCarrier[],
+  before: readonly (readonly OnCarrier[])[],
 ): StepChange[] {
   const trim: StepChange[] =
     trimWidth && trimDepth
@@ -103,8 +108,9 @@ function changesOf(
           },
         ]
       : [];
-  const gone = kind === "debond" ? before.find(({ face }) => face === handling?.debondFace) : undefined;
-  const letGo: StepChange[] = gone ? [{ word: "lets go", what: gone.name, side: SIDE_NAMES[gone.face] }] : [];
+  const gone = kind === "debond" ? before.flat().filter(({ face }) => face === handling?.debondFace) : [];
+  const names = [...new Set(gone.map(({ name }) => name))].join(" or ");
+  const letGo: StepChange[] = gone[0] ? [{ word: "lets go", what: names, side: SIDE_NAMES[gone[0].face] }] : [];
   return [...trim, ...films.map(filmChange), ...letGo];
 }
 
@@ -124,53 +130,39 @@ function bondWords({ carrier, bondingMaterial, bondThickness, handling }: ShownS
   return [...words, handling?.bondFace === "back" ? "on the back side" : null].filter(Boolean).join(", ");
 }
 
-/** What holds a wafer between two carriers, where there is no room for both names. */
-export const BOTH_CARRIERS = "both carriers";
-
-interface OnCarrier {
-  name: string;
-  face: Side;
-}
-
-/** The carriers that the wafer is on after each step, by name and face. */
-export function carriersAlong(steps: readonly ShownStep[]): OnCarrier[][] {
-  const spans = spansOfKinds(
-    steps.map(({ kind, carrier, handling }) => ({ kind: kind === "bond" && !carrier ? null : kind, ...handling })),
-  );
-  return steps.map((_, index) => {
-    const on = spans.filter(({ from, to }) => from <= index + 1 && (to === null || index + 1 < to));
-    return on.flatMap(({ from, face }) => {
-      const name = steps[from - 1]?.carrier?.name;
-      return name === undefined ? [] : [{ name, face }];
-    });
-  });
-}
-
-/** The rows of the step table: silicon and carriers are carried on from step to step. */
+/** The rows of the step table: silicon and carriers are carried on from step to step, for the wafers that take them. */
 export function stepRows(steps: readonly ShownStep[], incoming: Measured): StepRow[] {
-  let silicon = incoming;
-  const carriers = carriersAlong(steps);
+  const along = planAlong(steps, incoming);
   return steps.map((step, index) => {
-    const changed = step.siliconAfter !== null;
-    silicon = step.siliconAfter ?? silicon;
+    const { silicon = [], before = [], after = [] } = along[index] ?? {};
     const bonds = step.kind === "bond" && step.carrier;
+    const { slots } = step.handling ?? {};
     return {
       id: step.id,
       number: index + 1,
       title: step.title,
       kind: step.kind,
-      changes: changesOf(step, carriers[index - 1] ?? []),
+      slots: slots ? slotsInWords(slots) : null,
+      changes: changesOf(step, before),
       peak: formatBare(step.peakTemperature, "temperature", "°C"),
       minutes: holdWords({ holdTime: step.holdTime, profile: step.handling?.profile ?? null }),
-      silicon: { text: siliconText(silicon), changed },
+      silicon: { text: alternatives(silicon.map(siliconText)) ?? "", changed: step.siliconAfter !== null },
       tool: step.equipment?.name ?? null,
       run: runWords(step.handling ?? {}),
       sideUp: step.handling?.sideUp ?? null,
       profiled: Boolean(step.handling?.profile),
       exposures: step.exposures,
       planned: step.planned,
-      bond: bonds ? bondWords(step) : carriers[index]?.map(({ name }) => name).join(" and ") || null,
+      bond: bonds ? bondWords(step) : alternatives(after.map(carrierNames)),
       assumed: isAssumed(step),
     };
   });
+}
+
+const carrierNames = (on: readonly OnCarrier[]) => on.map(({ name }) => name).join(" and ") || "no carrier";
+
+/** Different texts joined; null where there is nothing but 'no carrier'. */
+function alternatives(texts: readonly string[]): string | null {
+  const different = [...new Set(texts)];
+  return different.length === 1 && different[0] === "no carrier" ? null : different.join(" or ");
 }

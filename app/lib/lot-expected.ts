@@ -12,6 +12,8 @@ export interface ExpectedShare {
   share: number;
   /** 95 % of lots lie in between: what is common to a lot moves all of its wafers together */
   lots: [number, number];
+  /** the slots that it is of, those that come out worst; null where the flow does not part by slot */
+  slots: number[] | null;
   /** what it rests on, a sentence; empty when there is nothing to name */
   by: string;
 }
@@ -44,6 +46,7 @@ export function expectedShare(flow: FlowInput, result: AssessmentResult): Expect
     title: result.steps[tightest.step - 1]?.title ?? "",
     share: 1 - normalShareBelow((beyond - warp.value) / all),
     lots: [ofLot(warp.value - WIDE * common), ofLot(warp.value + WIDE * common)],
+    slots: result.slots ?? null,
     by: sharedBy(at.budget),
   };
 }

@@ -1,4 +1,5 @@
 import type { EngineInputError } from "#app/engine/errors.ts";
+import { slotsInWords } from "#app/engine/flow/legs.ts";
 import { formatQuantity } from "#app/engine/units/format.ts";
 import type { ExpectedShare } from "./lot-expected.ts";
 import type { LotInput, WaferAnswer } from "#app/schemas/lot.ts";
@@ -62,23 +63,25 @@ const listed = (words: string[]) =>
 
 const capital = (text: string) => text.charAt(0).toUpperCase() + text.slice(1);
 
-/** What any lot comes to, in wafers of a full cassette. */
-export function expectedSentences({ step, title, share, lots: [least, most], by }: ExpectedShare): string[] {
+/** What any lot comes to, in wafers of a full cassette; where its slots part, of those that come out worst. */
+export function expectedSentences({ step, title, share, lots: [least, most], slots, by }: ExpectedShare): string[] {
   const place = `the tightest limit, that of step ${step}, ${title}`;
-  const of = (part: number) => inWafers(part);
+  const all = slots?.length ?? SLOTS;
+  const of = (part: number) => inWafers(part, all);
+  const where = slots ? ` in ${slotsInWords(slots)}` : "";
   const expected =
     of(most) === "none"
-      ? `With the tolerances given, no wafer of any lot is expected beyond ${place}.`
-      : `With the tolerances given, ${of(share)} of ${SLOTS} wafers ${share * SLOTS < 1.5 ? "is" : "are"} expected beyond ${place}.`;
+      ? `With the tolerances given, no wafer of any lot${where} is expected beyond ${place}.`
+      : `With the tolerances given, ${of(share)} of ${all} wafers${where} ${share * all < 1.5 ? "is" : "are"} expected beyond ${place}.`;
   const range = of(least) === of(most) ? "" : `Of 95 lots in 100 it is between ${of(least)} and ${of(most)}.`;
   return [expected, range, by].filter((sentence) => sentence !== "");
 }
 
 /** 'fewer than 1', 'about 3', 'nearly all'. */
-function inWafers(share: number): string {
-  const wafers = share * SLOTS;
+function inWafers(share: number, all: number): string {
+  const wafers = share * all;
   if (wafers < 0.05) return "none";
   if (wafers < 1) return "fewer than 1";
-  if (wafers > SLOTS - 0.5) return "nearly all";
+  if (wafers > all - 0.5) return "nearly all";
   return `about ${formatQuantity(Math.round(wafers), "number", { decimals: 0 })}`;
 }

@@ -21,7 +21,7 @@ import { revisionOf } from "./assessment-revision.ts";
 import { isRolled, lyingAs } from "./lying-as.ts";
 import { sentenceCase } from "./assessment-steps.ts";
 import { faceToSay, titleBlock, type AssessmentHead } from "./assessment-view.ts";
-import { BOTH_CARRIERS } from "./flow-rows.ts";
+import { BOTH_CARRIERS } from "./plan-along.ts";
 import { formatBare } from "./format-measured.ts";
 import { doNotLines } from "./sheet-do-not.ts";
 import { holdWords, runWords } from "./run-words.ts";

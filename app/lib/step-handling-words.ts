@@ -1,6 +1,7 @@
 import type { Dimension } from "#app/engine/units/dimensions.ts";
 import { formatQuantity } from "#app/engine/units/format.ts";
 import type { Measured } from "#app/engine/measured.ts";
+import { runsInWords } from "#app/engine/runs-in-words.ts";
 import type { TapeInput } from "#app/engine/flow/handling-inputs.ts";
 import { SIDE_NAMES, type Side } from "#app/engine/vocabulary.ts";
 import type { StepHandlingValues } from "#app/schemas/step-handling.ts";
@@ -32,6 +33,7 @@ export function stepHandlingWords(
   const times = Object.entries(handling.exposureTimes).map(([exposure, seconds]) => `${exposure} ${time(seconds)}`);
   return [
     ["Temperature profile", handling.profile && profileWords(handling.profile)],
+    ["Slots", handling.slots && runsInWords(handling.slots)],
     ["Machine", handling.machine],
     ["Recipe", handling.recipe],
     ["Side up", handling.sideUp],

@@ -2,6 +2,7 @@ import { z } from "zod";
 import { CONTACT_MEANS, RESISTANCE_WORDS, SOLVENT_FAMILIES } from "#app/engine/flow/handling-inputs.ts";
 import { EXPOSURES, FACES_UP, type Exposure } from "#app/engine/vocabulary.ts";
 import { exposureKey } from "#app/lib/exposure-key.ts";
+import { readSlots } from "#app/lib/step-slots.ts";
 import { readProfile } from "#app/lib/temperature-profile.ts";
 import { optionalMeasured, optionalQuantity } from "./quantity.ts";
 import { RULES } from "./ranges.ts";
@@ -57,6 +58,18 @@ const temperatureProfile = z
     return z.NEVER;
   });
 
+/** Slots of the cassette; all of them are null, as a blank is. */
+const slots = z
+  .string()
+  .max(200, "That is too long for a list of slots.")
+  .optional()
+  .transform((typed, context) => {
+    const read = readSlots(typed);
+    if (read.ok) return read.slots;
+    context.addIssue({ code: "custom", message: read.message });
+    return z.NEVER;
+  });
+
 const assumed = { source: "assumed" } as const;
 
 /** What the handling rules ask of a step beyond its physics. All of it may be left blank, which is missing. */
@@ -83,6 +96,8 @@ export const stepHandling = z.object({
   sideUp: optionalChoice(FACES_UP),
   machine: optionalLine(60),
   recipe: optionalLine(120),
+  /** that take the step, from 1, in order; null for all */
+  slots,
   /** id of the piece of the carrier that is bonded */
   carrierPiece: identifier,
   tapeName: optionalLine(120),

@@ -1,6 +1,6 @@
 import { readFileSync } from "node:fs";
 import type { Locator, Page } from "@playwright/test";
-import { expect, expectNoAxeFindings, signIn, test } from "./support.ts";
+import { expect, expectNoAxeFindings, scriptsAtWork, signIn, test } from "./support.ts";
 
 const UUID = /\/stacks\/[0-9a-f-]{36}/;
 const WAFER = "Silicon (001), 200 mm, 725 µm";
@@ -27,6 +27,7 @@ async function addFilm(page: Page, film: string, thickness: string, coverage?: s
 /** A new stack of Tern: 200 µm of silicon under copper. */
 async function fillNew(page: Page, name: string) {
   await page.goto("/stacks/new");
+  await scriptsAtWork(field(page, "name"));
   await field(page, "name").fill(name);
   await field(page, "program").selectOption({ label: "Tern" });
   await field(page, "silicon").selectOption({ label: WAFER });

@@ -1,6 +1,6 @@
 import { readFileSync } from "node:fs";
 import AxeBuilder from "@axe-core/playwright";
-import { test as base, expect, type Page } from "@playwright/test";
+import { test as base, expect, type Locator, type Page } from "@playwright/test";
 
 export { expect };
 
@@ -34,6 +34,16 @@ export async function signIn(page: Page, role: Role): Promise<void> {
   await page.getByLabel("Password").fill(password);
   await page.getByRole("button", { name: "Sign in" }).click();
   await expect(page.getByRole("navigation", { name: "Places" })).toBeVisible();
+}
+
+/**
+ * Waits until the page's scripts answer for an element. A button pressed before sends its form, as it does without scripts, which
+ * takes a loaded machine long.
+ */
+export async function scriptsAtWork(element: Locator): Promise<void> {
+  await expect
+    .poll(() => element.evaluate((node) => Object.keys(node).some((key) => key.startsWith("__reactProps"))))
+    .toBe(true);
 }
 
 /** axe's findings on the page as it stands, none of which are expected. */

@@ -82,6 +82,81 @@ test("the copy's plan comes to the very flow that the engine tried, for every ki
   }
 }, 60_000);
 
+test("where slots part, a change made in the plan comes to what the engine tried on the leg", async () => {
+  const { trialGround, tryOnCopy, applyChange, runAssessment } = await services();
+  const scope = await scopeOfPerson(database, "engineer");
+  const [flow] = await asOwner<{ id: string }>(database, "select id from flow where name = ?", [PETREL]);
+  const { copyFlow } = await import("#app/services/flows/new-flow.server.ts");
+  const [low, high] = [
+    Array.from({ length: 12 }, (_, index) => index + 1),
+    Array.from({ length: 13 }, (_, index) => index + 13),
+  ];
+  // Bond, debond and what lies between are once for each half of the lot; the first half is bonded first.
+  const copied = await copyFlow(scope, flow?.id ?? "", (_em, plan) => {
+    const from = plan.steps.findIndex(({ kind }) => kind === "bond");
+    const to = plan.steps.findIndex(({ kind }) => kind === "debond");
+    const span = plan.steps.slice(from, to + 1);
+    const half = (slots: number[]) =>
+      span.map((step) => ({
+        ...step,
+        id: crypto.randomUUID(),
+        handling: { ...step.handling, slots },
+      }));
+    return Promise.resolve({
+      plan: {
+        ...plan,
+        steps: plan.steps.toSpliced(from, span.length, ...half(low), ...half(high)),
+      },
+      words: "Parted by slot",
+    });
+  });
+  if (copied.outcome !== "saved" || copied.id === null) throw new Error(copied.outcome);
+  const ran = await runAssessment(scope, copied.id);
+  if (ran.outcome !== "stored") throw new Error(ran.reason);
+  const leg = new URLSearchParams({ leg: "2" });
+  const { input, catalogue } = await trialGround(scope, ran.id, leg);
+  const bonds = input.flow.steps.flatMap(({ kind }, index) => (kind === "bond" ? [index + 1] : []));
+  expect(bonds).toHaveLength(2);
+  const [, second = 0] = bonds;
+  const debonds = input.flow.steps.flatMap(({ kind }, index) => (kind === "debond" ? [index + 1] : []));
+  const mounter = catalogue.tools.find(({ kinds }) => kinds.includes("mount on frame"))?.tool.id ?? "";
+  const idOf = (list: readonly { id: string; name: string }[], name: string) =>
+    list.find((each) => each.name === name)?.id ?? "";
+  const changes: FlowChange[] = [
+    {
+      quantity: "bond",
+      step: second,
+      carrier: idOf(catalogue.carriers, "Silicon carrier 775 µm"),
+      material: idOf(
+        catalogue.materials.map(({ material }) => material),
+        "Peel adhesive C with release layer",
+      ),
+      thickness: 40e-6,
+    },
+    { quantity: "frame", step: (debonds[1] ?? 0) + 1, tool: mounter },
+  ];
+  for (const change of changes) {
+    const { path } = await tryOnCopy(scope, ran.id, JSON.stringify([change]), "2");
+    const copy = await trialGround(scope, copyIn(path), leg);
+    const expected = applyChange(input.flow, change, catalogue);
+    expect(expected).not.toEqual(input.flow);
+    const untitled = ({ steps, ...rest }: typeof expected) => ({
+      ...rest,
+      name: "",
+      steps: steps.map((step) => ({ ...step, title: "" })),
+    });
+    expect(JSON.parse(JSON.stringify(untitled(copy.input.flow)))).toEqual(
+      JSON.parse(JSON.stringify(untitled(expected))),
+    );
+    // The other half of the lot keeps its bond.
+    const other = await trialGround(scope, copyIn(path), new URLSearchParams({ leg: "1" }));
+    const [first = 0] = bonds;
+    expect(other.input.flow.steps[first - 1]?.bond).toEqual(
+      (await trialGround(scope, ran.id, new URLSearchParams({ leg: "1" }))).input.flow.steps[first - 1]?.bond,
+    );
+  }
+}, 60_000);
+
 test("a remedy tried on a copy clears what it says, and leaves the flow as it is", async () => {
   const { trialGround, trialQuestion, remediesOf, tryOnCopy, getAssessment } = await services();
   const scope = await scopeOfPerson(database, "engineer");

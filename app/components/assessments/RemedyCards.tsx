@@ -35,7 +35,7 @@ export function RemedyCards({ cards, head, across = false }: Props) {
           </div>
           {head.barred === null ? (
             <div className={across ? "max-tablet:mt-2 tablet:shrink-0" : "mt-2"}>
-              <TryOnCopy assessmentId={head.id} posted={card.posted} name={card.changes.map(changePhrase).join("; ")} />
+              <TryOnCopy head={head} posted={card.posted} name={card.changes.map(changePhrase).join("; ")} />
             </div>
           ) : null}
         </li>

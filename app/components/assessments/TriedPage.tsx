@@ -22,11 +22,7 @@ export function TriedPage({ page }: { page: TriedPageData }) {
           { name: head.flow.name, path: `/flows/${head.flow.id}` },
           { name: `Assessment ${head.revision}`, path: trialHome(head) },
         ]}
-        actions={
-          head.barred === null ? (
-            <TryOnCopy assessmentId={head.id} posted={posted} name={changes.join("; ")} />
-          ) : undefined
-        }
+        actions={head.barred === null ? <TryOnCopy head={head} posted={posted} name={changes.join("; ")} /> : undefined}
       />
       <TrialBarred head={head} />
       <TrialLeg head={head} />

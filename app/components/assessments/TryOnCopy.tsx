@@ -1,7 +1,8 @@
 import { Form, useNavigation } from "react-router";
 
 interface Props {
-  assessmentId: string;
+  /** what it is tried on */
+  head: { id: string; leg: { number: number } | null };
   /** the changes, as they are posted */
   posted: string;
   /** what is tried, for who does not see where the button stands */
@@ -9,12 +10,13 @@ interface Props {
 }
 
 /** Copies the flow with a change, assesses the copy and shows both side by side. The flow itself stays as it is. */
-export function TryOnCopy({ assessmentId, posted, name }: Props) {
+export function TryOnCopy({ head, posted, name }: Props) {
   const { state, formData } = useNavigation();
   const waiting = state !== "idle" && formData?.get("changes") === posted;
   return (
-    <Form method="post" action={`/assessments/${assessmentId}/remedies`} className="screen-only">
+    <Form method="post" action={`/assessments/${head.id}/remedies`} className="screen-only">
       <input type="hidden" name="changes" value={posted} />
+      {head.leg && <input type="hidden" name="leg" value={head.leg.number} />}
       <button
         type="submit"
         className="btn whitespace-nowrap"

@@ -82,11 +82,7 @@ function FinderFinding({ row, head }: { row: FinderRow; head: TrialHead }) {
         {tightest ? `tightest at ${tightestWords(tightest)}` : undefined} {working}
       </FindingTag>
       {posted !== null && head.barred === null ? (
-        <TryOnCopy
-          assessmentId={head.id}
-          posted={posted}
-          name={`${carrier}, ${material}, ${micrometres(thickness)} µm`}
-        />
+        <TryOnCopy head={head} posted={posted} name={`${carrier}, ${material}, ${micrometres(thickness)} µm`} />
       ) : null}
     </div>
   );

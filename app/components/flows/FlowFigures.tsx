@@ -13,7 +13,7 @@ export function FlowFigures({ figures }: { figures: readonly FlowFigure[] }) {
       {figures.map(({ label, value }) => (
         <div
           key={label}
-          className="-mt-px -ml-px border-t border-l border-line px-4 py-2 max-tablet:first:col-span-2 tablet:px-6"
+          className="-mt-px -ml-px border-t border-l border-line px-4 py-2 max-tablet:first:col-span-2 nth-[6]:col-span-full tablet:px-6"
         >
           <dt className="text-label text-quiet">{label}</dt>
           <dd className="text-lead font-medium">{noBreak(value)}</dd>

@@ -119,6 +119,12 @@ function StepFields(props: FieldsProps) {
           />
           <LineField field={handling.machine} label="Which of them" hint="Of several alike: oven 3" />
           <LineField field={handling.recipe} label="Recipe" hint="As the tool calls it" />
+          <LineField
+            field={handling.slots}
+            label="Slots"
+            hint="Of the cassette: 1-12, 14. Blank: every wafer of the lot"
+            className="col-span-2"
+          />
         </div>
       </div>
       <div className="grid gap-x-3 gap-y-4 tablet:grid-cols-[1fr_2fr]">

@@ -118,7 +118,8 @@ interface RowProps extends Pick<StepTableProps, "href" | "actions"> {
 }
 
 function Row({ row, href, current, actions, more, handle, look }: RowProps) {
-  const { number, title, kind, changes, peak, minutes, silicon, tool, run, sideUp, exposures, planned, bond } = row;
+  const { number, title, kind, slots, changes, peak, minutes, silicon, tool, run, sideUp, exposures, planned, bond } =
+    row;
   const assumedWords = row.assumed && <span className="font-semibold text-caution"> assumed numbers</span>;
   const toolWords = tool ?? <span className="font-semibold text-caution">No tool chosen</span>;
   return (
@@ -147,6 +148,7 @@ function Row({ row, href, current, actions, more, handle, look }: RowProps) {
         )}
         <span className="block text-label text-quiet max-tablet:hidden">
           {kind}
+          {slots && `, ${slots}`}
           <span className="wide:hidden">
             , {toolWords}
             {run && `, ${run}`}
@@ -156,6 +158,7 @@ function Row({ row, href, current, actions, more, handle, look }: RowProps) {
         </span>
         <div className="tablet:hidden">
           <p className="text-label text-quiet">
+            {slots && `${slots}: `}
             {silicon.text} µm, {peak} °C{minutes && `, ${minutes}`}, {planned}
             {bond && `: ${noBreak(bond)}`}
             {tool === null && <>, {toolWords}</>}

@@ -3,6 +3,7 @@ import { EXPOSURES } from "#app/engine/vocabulary.ts";
 import type { Measured } from "#app/engine/measured.ts";
 import { exposureKey } from "#app/lib/exposure-key.ts";
 import { measuredText, quantityText } from "#app/lib/form-values.ts";
+import { slotsText } from "#app/lib/step-slots.ts";
 import { profileText } from "#app/lib/temperature-profile.ts";
 import type { StepHandlingValues } from "#app/schemas/step-handling.ts";
 import type { MeasuredText } from "../forms/MeasuredField.tsx";
@@ -45,6 +46,7 @@ export function stepHandlingText(handling: StepHandlingValues): StepHandlingText
     sideUp: handling.sideUp ?? "",
     machine: handling.machine ?? "",
     recipe: handling.recipe ?? "",
+    slots: slotsText(handling.slots),
     carrierPiece: handling.carrierPiece ?? "",
     tapeName: handling.tapeName ?? "",
     tapeTemperatureLimit: measuredText(handling.tapeTemperatureLimit, "temperature", {

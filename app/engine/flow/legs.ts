@@ -21,16 +21,24 @@ const EVERY_SLOT = Array.from({ length: SLOTS }, (_, index) => index + 1);
 export function legFlows(flow: FlowInput): FlowInput[] {
   if (flow.leg || !hasLegs(flow)) return [flow];
   flow.steps.forEach(checkSlots);
+  const legs = legsOfSteps(flow.steps);
+  if (legs.length > MOST_LEGS)
+    throw new EngineInputError("slots", `the slots part into ${legs.length} legs`, `up to ${MOST_LEGS} legs`);
+  return legs.length === 1 ? [{ ...flow, leg: { slots: EVERY_SLOT } }] : legs.map((slots) => legOf(flow, slots));
+}
+
+/** The classes of slots that take the same steps, by their first slot; one with every slot where no step is for some only. */
+export function legsOfSteps(steps: readonly SlottedStep[]): number[][] {
   const legs = new Map<string, number[]>();
   for (const slot of EVERY_SLOT) {
-    const steps = flow.steps.map((step) => (takes(step, slot) ? "+" : "-")).join("");
-    legs.set(steps, [...(legs.get(steps) ?? []), slot]);
+    const taken = steps.map((step) => (takes(step, slot) ? "+" : "-")).join("");
+    legs.set(taken, [...(legs.get(taken) ?? []), slot]);
   }
-  if (legs.size > MOST_LEGS)
-    throw new EngineInputError("slots", `the slots part into ${legs.size} legs`, `up to ${MOST_LEGS} legs`);
-  if (legs.size === 1) return [{ ...flow, leg: { slots: EVERY_SLOT } }];
-  return [...legs.values()].map((slots) => legOf(flow, slots));
+  return [...legs.values()];
 }
+
+/** What of a step says which slots take it. */
+type SlottedStep = Pick<StepInput, "slots">;
 
 /** The flow as the wafer of a slot goes through it. @throws EngineInputError as `legFlows` does, and for a slot that is none */
 export function legOfSlot(flow: FlowInput, slot: number): FlowInput {
@@ -45,7 +53,14 @@ export function hasLegs({ leg, steps }: Pick<FlowInput, "leg" | "steps">): boole
   return !leg && steps.some(({ slots }) => slots);
 }
 
-const takes = ({ slots }: StepInput, slot: number) => !slots || slots.includes(slot);
+/** Whether the wafer of a slot goes through a step. */
+export const takes = ({ slots }: SlottedStep, slot: number) => !slots || slots.includes(slot);
+
+/** The slots of all of some steps together; null when one of them is for every slot. */
+export function slotsServed(steps: readonly SlottedStep[]): number[] | null {
+  if (steps.length === 0 || steps.some(({ slots }) => !slots)) return null;
+  return EVERY_SLOT.filter((slot) => steps.some((step) => takes(step, slot)));
+}
 
 function checkSlots({ slots }: StepInput, index: number): void {
   if (!slots) return;

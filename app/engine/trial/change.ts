@@ -2,6 +2,7 @@ import { bondSpans } from "../finder/bond-spans.ts";
 import { withBond } from "../finder/with-bond.ts";
 import { ROOM_TEMPERATURE } from "../laminate/layer.ts";
 import type { FilmAddition, FlowInput, StepInput } from "../flow/model.ts";
+import { slotsServed } from "../flow/legs.ts";
 import { withPeak } from "../flow/temperature-profile.ts";
 import type { Holding } from "../vocabulary.ts";
 import type { Catalogue } from "./catalogue.ts";
@@ -69,7 +70,7 @@ export function moved<Item>(items: readonly Item[], { step, to }: { step: number
 export function framedSteps(steps: readonly Pick<StepInput, "planned" | "kind" | "skipped">[], from: number): number[] {
   const rest = steps.slice(from - 1);
   const end = rest.findIndex(
-    ({ planned, kind, skipped }) => !["bare", "thin-wafer gripper"].includes(planned) || (kind === "bond" && !skipped),
+    ({ planned, kind, skipped }) => !skipped && (!["bare", "thin-wafer gripper"].includes(planned) || kind === "bond"),
   );
   const length = end < 0 ? rest.length : end;
   return Array.from({ length }, (_, index) => from + index);
@@ -149,7 +150,9 @@ function onFrame(
   const steps = flow.steps.map((each, index) =>
     framed.has(index + 1) ? { ...each, planned: "film frame" as const } : each,
   );
-  return { ...flow, steps: steps.toSpliced(step - 1, 0, mountStep(equipment)) };
+  const slots = slotsServed(flow.steps.filter(({ skipped }, index) => !skipped && framed.has(index + 1)));
+  const mount = mountStep(equipment);
+  return { ...flow, steps: steps.toSpliced(step - 1, 0, slots ? { ...mount, slots } : mount) };
 }
 
 function mountStep(equipment: StepInput["equipment"]): StepInput {

@@ -1,4 +1,5 @@
 import { randomUUID } from "node:crypto";
+import { legFlows } from "#app/engine/flow/legs.ts";
 import type { FlowChange } from "#app/engine/trial/change.ts";
 import { planWith } from "#app/lib/flow-change.ts";
 import { changePhrase } from "#app/lib/change-phrase.ts";
@@ -20,7 +21,8 @@ export interface Trial {
 }
 
 /**
- * Copies the flow of an assessment, makes the posted changes in the copy, and assesses it. The flow itself stays as it is.
+ * Copies the flow of an assessment, makes the posted changes in the copy, and assesses it. The flow itself stays as it is. Of a flow
+ * that parts by slot the changes were tried on the leg of that number; what other legs share with it changes for them too.
  * @throws 400 for changes that no page of ours sends, 403 for a role that may not, 409 when the assessment is out of date: what was
  * tried rests on what stood then
  */
@@ -28,6 +30,7 @@ export async function tryOnCopy(
   scope: ActorScope,
   assessmentId: string | undefined,
   posted: FormDataEntryValue | null,
+  leg: FormDataEntryValue | null = null,
 ): Promise<Trial> {
   const changes = readFlowChanges(posted);
   if (!changes) throw problem(400, "This change cannot be tried. Open the assessment again and choose it anew.");
@@ -38,10 +41,11 @@ export async function tryOnCopy(
     const catalogue = await readCatalogue(em);
     const stressOf = (step: number, film: number) =>
       flow.steps[step - 1]?.films.filter(({ change }) => change === "adds")[film]?.stress ?? null;
-    const context = { catalogue, stressOf, newId: randomUUID };
+    const tried = legFlows(input.flow)[Number(leg) - 1];
+    const context = { catalogue, stressOf, newId: randomUUID, slot: tried?.leg?.slots[0] };
     return {
       plan: changes.reduce((next, change) => planWith(next, change, context), plan),
-      words: `Changed: ${changes.map((change: FlowChange) => changePhrase(changeWords(change, input.flow, catalogue))).join("; ")}`,
+      words: `Changed: ${changes.map((change: FlowChange) => changePhrase(changeWords(change, tried ?? input.flow, catalogue))).join("; ")}`,
     };
   });
   if (copied.outcome !== "saved") throw problem(409, "Somebody copied this flow at the same moment. Please try again.");

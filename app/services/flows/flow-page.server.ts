@@ -1,3 +1,4 @@
+import { legsOfSteps, slotsInWords } from "#app/engine/flow/legs.ts";
 import type { Measured } from "#app/engine/measured.ts";
 import { planColumns } from "#app/lib/flow-plan.ts";
 import { stepRows, type StepRow } from "#app/lib/flow-rows.ts";
@@ -28,6 +29,8 @@ export interface FlowPage {
   hottest: number | null;
   rows: StepRow[];
   plan: ReturnType<typeof planColumns>;
+  /** the slots of each leg, in words; empty where every wafer takes every step */
+  legs: string[];
   /** newest first */
   assessments: FlowAssessmentRow[];
   /** kept lots, newest first */
@@ -68,6 +71,7 @@ export async function flowPage(scope: ActorScope, flowId: string | undefined): P
     hottest: steps.length === 0 ? null : Math.max(...steps.map(({ peakTemperature }) => peakTemperature)),
     rows: stepRows(steps, incomingThickness),
     plan: planColumns(steps, incomingThickness),
+    legs: legsInWords(steps),
     assessments,
     lots,
     history,
@@ -76,4 +80,9 @@ export async function flowPage(scope: ActorScope, flowId: string | undefined): P
     mayAssess: flow.mayAssess,
     mayKeep: steps.length > 0 && mayOnSite(scope.actor, "edit the step library"),
   };
+}
+
+function legsInWords(steps: readonly { handling: { slots?: number[] | null } }[]): string[] {
+  const legs = legsOfSteps(steps.map(({ handling }) => handling));
+  return legs.length > 1 ? legs.map(slotsInWords) : [];
 }

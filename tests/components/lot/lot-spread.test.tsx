@@ -87,7 +87,10 @@ it("a kept lot says of which assessment it is, and that it is no revision", () =
 });
 
 describe("what any lot is expected to come to", () => {
-  const expected = { step: 12, title: "Edge trim", share: 0.12, lots: [0.001, 0.42] as [number, number], by: "" };
+  const expected = {
+    ...{ step: 12, title: "Edge trim", share: 0.12, lots: [0.001, 0.42] as [number, number] },
+    ...{ slots: null, by: "" },
+  };
 
   it("is said in wafers of a cassette, with the range of single lots", () => {
     expect(expectedSentences(expected)).toEqual([
@@ -98,6 +101,12 @@ describe("what any lot is expected to come to", () => {
       "With the tolerances given, no wafer of any lot is expected beyond the tightest limit, that of step 12, Edge trim.",
       "It rests most on A.",
     ]);
+  });
+
+  it("is said of the slots that come out worst where a flow parts by slot", () => {
+    expect(expectedSentences({ ...expected, slots: [1, 2, 3, 4, 5, 6, 7, 8, 9, 10] })[0]).toBe(
+      "With the tolerances given, about 1 of 10 wafers in slots 1 to 10 is expected beyond the tightest limit, that of step 12, Edge trim.",
+    );
   });
 });
 

@@ -170,6 +170,7 @@ describe("figures of a flow", () => {
       thinnest: stated(um(100), um(3)),
       hottest: 518.15,
       rows: [1, 2],
+      legs: [],
     });
     expect(figures.map(({ value }) => value)).toEqual([
       "Silicon (001), 200 mm",
@@ -178,7 +179,15 @@ describe("figures of a flow", () => {
       "245\u00a0°C",
       "2",
     ]);
-    const empty = flowFigures({ silicon, incoming, incomingBow: null, thinnest: null, hottest: null, rows: [] });
+    const empty = flowFigures({
+      silicon,
+      incoming,
+      incomingBow: null,
+      thinnest: null,
+      hottest: null,
+      rows: [],
+      legs: [],
+    });
     expect(empty.map(({ value }) => value).slice(2, 4)).toEqual(["no steps yet", "no steps yet"]);
   });
 
@@ -186,7 +195,7 @@ describe("figures of a flow", () => {
     const silicon = { name: "Silicon (001), 200 mm", diameter: 0.2 };
     const comesIn = (along: number, across: number) =>
       flowFigures({
-        ...{ silicon, incoming, thinnest: null, hottest: null, rows: [] },
+        ...{ silicon, incoming, thinnest: null, hottest: null, rows: [], legs: [] },
         incomingBow: { along: stated(um(along)), across: stated(um(across)) },
       })[1]?.value;
     expect(comesIn(-90, -80)).toBe("725\u00a0±\u00a015\u00a0µm, bow −90\u00a0µm and −80\u00a0µm");

@@ -33,7 +33,7 @@ export async function clientLoader({
 /** Trying a change on a copy: from here, from the assessment and from the finder. */
 export async function action({ request, context, params }: Route.ActionArgs) {
   const form = await postedForm(request);
-  const { path } = await tryOnCopy(scopeOf(context), params.assessmentId, form.get("changes"));
+  const { path } = await tryOnCopy(scopeOf(context), params.assessmentId, form.get("changes"), form.get("leg"));
   throw redirect(path);
 }
 
