@@ -41,7 +41,7 @@ export interface FileReading {
   to: number;
   skipped: SkippedRow[];
   skippedInAll: number;
-  /** points that the fit was given in place of those used, each the mean of a stretch; left out when it was given all */
+  /** of an older reading: points that the fit was given in place of those used, each the mean of a stretch */
   averagedTo?: number;
   /** of this file; left out in older readings, where both files had that of the scan */
   format?: FileFormat;

@@ -2,7 +2,7 @@ import { EngineInputError } from "../errors.ts";
 import { requireWithin } from "../inputs.ts";
 import { studentFactor } from "../uncertainty/student.ts";
 import { fitCircle } from "./circle.ts";
-import { ascendingColumns, distinctUpTo, firstFrom, type ScanColumns } from "./columns.ts";
+import { ascendingColumns, distinctUpTo, firstFrom, kept, type ScanColumns } from "./columns.ts";
 import { plainParabola, polynomialBasis, takeOut, type PolynomialBasis } from "./orthogonal-polynomials.ts";
 import { FEWEST_POINTS, requireEnough } from "./points.ts";
 import { pointsOnParabola } from "./robust-points.ts";
@@ -123,17 +123,6 @@ function insideEdges(x: Float64Array, edgeExclusion: number): [number, number] {
   while (high < x.length && (x[high] ?? 0) <= last - exclusion) high += 1;
   requireEnough("points", high > low ? distinctUpTo(x.subarray(low, high), FEWEST_POINTS) : 0);
   return [low, high];
-}
-
-function kept(values: Float64Array, keep: Uint8Array): Float64Array {
-  const out = new Float64Array(values.length);
-  let count = 0;
-  for (let n = 0; n < values.length; n += 1) {
-    if (keep[n] !== 1) continue;
-    out[count] = values[n] ?? 0;
-    count += 1;
-  }
-  return count === values.length ? values : out.subarray(0, count);
 }
 
 function scaled(x: Float64Array): { t: Float64Array; centre: number; halfWidth: number } {

@@ -1,16 +1,14 @@
-import type { ProfilePoint } from "#app/engine/profile/points.ts";
 import { excerpt } from "#app/lib/excerpt.ts";
 import type { ImportProfile } from "#app/schemas/import-profile.ts";
 import type { FileFormat, FileReading, SkippedRow } from "#app/schemas/scan-result.ts";
-import { profilePoints } from "./profile-points.ts";
 import type { FileProfile, ProfileFile } from "./profile-rows.ts";
 import { LENGTH_UNITS, type Reading } from "./reading.ts";
 import { ScanFileError } from "./refusal.ts";
 import { readScanFile, type ScanRead } from "./scan-reader.ts";
 
-/** The only profile of a file: its points for the engine, and how the file was understood. */
+/** The only profile of a file: all its points for the engine, and how the file was understood. */
 export interface ReadProfile {
-  points: ProfilePoint[];
+  points: { x: Float64Array; z: Float64Array };
   reading: FileReading;
 }
 
@@ -57,8 +55,7 @@ function onlyProfile(read: ScanRead, name: string): ReadProfile {
     throw new ScanFileError(
       `${name} holds ${read.content.profiles.length} profiles: ${read.content.profiles.map((each) => `“${excerpt(each.name, 30)}”`).join(", ")}. Export the one that is meant to a file of its own.`,
     );
-  const points = profilePoints(only);
-  return { points, reading: fileReading(read.reading, read.content, only, points.length) };
+  return { points: { x: only.x, z: only.z }, reading: fileReading(read.reading, read.content, only) };
 }
 
 /** Nothing but the columns is open, and no head says anything of them. */
@@ -71,7 +68,7 @@ function isOnlyUnheaded({ outcome, reading }: ScanRead): boolean {
   );
 }
 
-function fileReading(reading: Reading, content: ProfileFile, profile: FileProfile, points: number): FileReading {
+function fileReading(reading: Reading, content: ProfileFile, profile: FileProfile): FileReading {
   const { position, height, x, from, to } = profile;
   const unitAt = (column: number) => LENGTH_UNITS.find((unit) => unit === reading.columns[column]?.unit) ?? "m";
   const heads = [position, height].map((column) => reading.columns[column]?.heading ?? "");
@@ -90,7 +87,6 @@ function fileReading(reading: Reading, content: ProfileFile, profile: FileProfil
     to,
     skipped,
     skippedInAll: content.faulty,
-    ...(points < x.length ? { averagedTo: points } : {}),
     // A file without any mark reads the same under either.
     format: {
       positionUnit: unitAt(position),
