@@ -41,7 +41,7 @@ export interface FileReading {
   to: number;
   skipped: SkippedRow[];
   skippedInAll: number;
-  /** of an older reading: points that the fit was given in place of those used, each the mean of a stretch */
+  /** points that the fit was given in place of those used, each the mean of a stretch; left out when it was given all */
   averagedTo?: number;
   /** of this file; left out in older readings, where both files had that of the scan */
   format?: FileFormat;

@@ -1,6 +1,7 @@
 import { createHash, randomUUID } from "node:crypto";
-import type { EntityManager } from "@mikro-orm/postgresql";
+import { UniqueConstraintViolationException, type EntityManager } from "@mikro-orm/postgresql";
 import { ScanFile } from "#app/db/entities/scan-file.ts";
+import type { StoredFile } from "#app/schemas/job.ts";
 import { notFound } from "#app/server/problem.server.ts";
 import { inScope, type ActorScope } from "#app/server/scope.server.ts";
 import type { UploadedFile } from "#app/server/upload.server.ts";
@@ -30,6 +31,22 @@ export async function keepScanFile(
   });
   await em.flush();
   return kept;
+}
+
+/** Keeps a file in a transaction of its own. */
+export async function keepScanFileAlone(scope: ActorScope, programId: string, file: UploadedFile): Promise<StoredFile> {
+  const keep = () =>
+    inScope(scope, async (em): Promise<StoredFile> => {
+      const { id, name, size } = await keepScanFile(em, scope, programId, file);
+      return { id, name, size };
+    });
+  try {
+    return await keep();
+  } catch (error) {
+    // Somebody stored the same file at the same moment: the second time finds it.
+    if (error instanceof UniqueConstraintViolationException) return keep();
+    throw error;
+  }
 }
 
 /**

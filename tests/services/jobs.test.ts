@@ -1,5 +1,6 @@
 import { readFileSync } from "node:fs";
 import { beforeAll, describe, expect, test, vi } from "vitest";
+import { filesOf } from "#app/lib/job-files.ts";
 import type { ActorScope } from "#app/server/scope.server.ts";
 import { leave, scopeOfPerson } from "#tests/db/people.ts";
 import { asOwner, useDatabase } from "#tests/db/test-database.ts";
@@ -53,7 +54,7 @@ describe("a job", () => {
     await run(id);
     const job = await seen(id);
     expect(job).toMatchObject({ state: "done", done: job.total, sentence: "Two read, one refused." });
-    expect(job.outcome?.files.map(({ outcome }) => outcome)).toEqual(["read", "refused", "read"]);
+    expect(filesOf(job.outcome).map(({ outcome }) => outcome)).toEqual(["read", "refused", "read"]);
     const [stored] = await asOwner<{ files: number }>(
       database,
       "select count(*)::int as files from scan_file where name = 'bad.csv'",

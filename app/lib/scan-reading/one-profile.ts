@@ -20,18 +20,26 @@ const LONGEST_HEAD = 80;
  * @throws ScanFileError with a sentence that says what is wrong, where, and what to do
  */
 export function readOneProfile(bytes: Uint8Array, fileName: string, stated: FileFormat): ReadProfile {
-  const name = excerpt(fileName, LONGEST_HEAD);
-  const { positionUnit, heightUnit, decimalMark } = stated;
-  const profile: ImportProfile = { decimalMark, units: { position: positionUnit, height: heightUnit } };
-  let read = readScanFile(bytes, fileName, profile);
-  if (isOnlyUnheaded(read)) {
-    const columns: ImportProfile["columns"] = [
-      { index: 0, role: "position" },
-      { index: 1, role: "height" },
-    ];
-    read = readScanFile(bytes, fileName, { ...profile, columns });
-  }
-  return onlyProfile(read, name);
+  const profile = statedProfile(stated);
+  const read = readScanFile(bytes, fileName, profile);
+  const unheaded = unheadedProfile(read, profile);
+  return onlyProfile(unheaded ? readScanFile(bytes, fileName, unheaded) : read, fileName);
+}
+
+/** What is stated, as an import profile. */
+export const statedProfile = ({ positionUnit, heightUnit, decimalMark }: FileFormat): ImportProfile => ({
+  decimalMark,
+  units: { position: positionUnit, height: heightUnit },
+});
+
+/** The profile to read a file by again of which nothing tells the columns; null when they are told. */
+export function unheadedProfile(read: ScanRead, profile: ImportProfile): ImportProfile | null {
+  if (!isOnlyUnheaded(read)) return null;
+  const columns: ImportProfile["columns"] = [
+    { index: 0, role: "position" },
+    { index: 1, role: "height" },
+  ];
+  return { ...profile, columns };
 }
 
 /**
@@ -39,10 +47,15 @@ export function readOneProfile(bytes: Uint8Array, fileName: string, stated: File
  * @throws ScanFileError with a sentence that says what is wrong, or still open, where, and what to do
  */
 export function readProfileBy(bytes: Uint8Array, fileName: string, profile: ImportProfile): ReadProfile {
-  return onlyProfile(readScanFile(bytes, fileName, profile), excerpt(fileName, LONGEST_HEAD));
+  return onlyProfile(readScanFile(bytes, fileName, profile), fileName);
 }
 
-function onlyProfile(read: ScanRead, name: string): ReadProfile {
+/**
+ * The only profile of a file that was read.
+ * @throws ScanFileError when it holds none or several, or leaves open what they are
+ */
+export function onlyProfile(read: ScanRead, fileName: string): ReadProfile {
+  const name = excerpt(fileName, LONGEST_HEAD);
   const { kind, ambiguities } = read.reading;
   if (kind !== "profiles")
     throw new ScanFileError(`${name} is a ${kind}, not a profile. Choose the scan, position and height in a row.`);

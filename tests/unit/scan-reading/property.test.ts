@@ -113,7 +113,7 @@ describe("numbers", () => {
     (text) => expect(numberReader("point", "none")(text)).toBeNaN(),
   );
 
-  it.each(["1.5", "1,", "1.234,5", ","])("'%s' is none with a decimal comma", (text) =>
+  it.each(["1.5", "1,", "1, ", "1,e5", "1.234,5", ","])("'%s' is none with a decimal comma", (text) =>
     expect(numberReader("comma", "none")(text)).toBeNaN(),
   );
 
