@@ -13,7 +13,7 @@ import type { ScanSubject, ScanValues } from "#app/schemas/scan.ts";
 import { inScope, type ActorScope } from "#app/server/scope.server.ts";
 import type { UploadedFile } from "#app/server/upload.server.ts";
 import { requireInProgram } from "./permission.server.ts";
-import { keepScanFile, sha256 } from "./scan-files.server.ts";
+import { fileHash, keepScanFile } from "./scan-files.server.ts";
 import { formatOf, pairRefusal, pairResult, type PairedProfile } from "./scan-pair.ts";
 
 export type Refused = { outcome: "refused"; field: "before" | "after" | "film" | ""; reason: string };
@@ -43,7 +43,7 @@ export async function uploadReadAs(
   readAs: ReadAs,
 ): Promise<Uploaded> {
   requireInProgram(scope, "upload scans", values.program, "program");
-  const computed = computeScan(values, files, readAs);
+  const computed = await computeScan(values, files, readAs);
   if ("outcome" in computed) return computed;
   try {
     return await keepScan(scope, values, files, computed.result);
@@ -54,17 +54,21 @@ export async function uploadReadAs(
   }
 }
 
-function computeScan(values: ScanSubject, files: ScanFiles, readAs: ReadAs): { result: ScanResult } | Refused {
+async function computeScan(
+  values: ScanSubject,
+  files: ScanFiles,
+  readAs: ReadAs,
+): Promise<{ result: ScanResult } | Refused> {
   let reading: "before" | "after" = "before";
-  const read = (which: "before" | "after"): PairedProfile => {
+  const read = async (which: "before" | "after"): Promise<PairedProfile> => {
     reading = which;
     const { name, bytes } = files[which];
     const profile = readAs(which, files[which]);
     checkOnWafer(profile, excerpt(name, 80), values);
-    return { name, hash: sha256(bytes), profile };
+    return { name, hash: await fileHash(bytes), profile };
   };
   try {
-    return { result: pairResult(values, read("before"), read("after")) };
+    return { result: pairResult(values, await read("before"), await read("after")) };
   } catch (error) {
     const reason = pairRefusal(error);
     if (reason === null) throw error;

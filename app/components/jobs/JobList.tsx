@@ -2,14 +2,7 @@ import { Form, Link } from "react-router";
 import { fileSize } from "#app/lib/file-size.ts";
 import { filesOf, scanOf } from "#app/lib/job-files.ts";
 import type { JobRow } from "#app/schemas/job.ts";
-
-const WORDS: Record<JobRow["state"], string> = {
-  waiting: "Waiting",
-  running: "Running",
-  done: "Done",
-  failed: "Failed",
-  stopped: "Stopped",
-};
+import { JOB_WORDS } from "./job-words.ts";
 
 /** Jobs, the newest first: how far each is, how it ended and, for whoever may, what can be done with it. */
 export function JobList({ jobs }: { jobs: JobRow[] }) {
@@ -47,7 +40,7 @@ function JobState({ job }: { job: JobRow }) {
     );
   return (
     <p className={`mt-1 break-words ${state === "failed" ? "text-stop" : ""}`}>
-      {WORDS[state]}
+      {JOB_WORDS[state]}
       {sentence && `. ${sentence}`}
       {scan !== null && (
         <>

@@ -19,7 +19,7 @@ const MOST_ROUNDS = 50;
 const SCALE_ROUNDS = 4;
 const SCALE_ROUNDS_AFTER_SAMPLE = 2;
 /** A parabola that moves by less than this share of how far off a point may lie leaves every point on its side. */
-const SETTLED = 1e-6;
+const SETTLED = 1e-5;
 
 /** c_0 + c_1 t + c_2 t² */
 type Parabola = readonly [number, number, number];

@@ -13,7 +13,7 @@ import { inScope, type ActorScope } from "#app/server/scope.server.ts";
 import type { UploadedFile } from "#app/server/upload.server.ts";
 import { enqueueOnce } from "../jobs/enqueue.server.ts";
 import { requireInProgram } from "../permission.server.ts";
-import { keepScanFile, keepScanFileAlone, sha256 } from "../scan-files.server.ts";
+import { fileHash, keepScanFile, keepScanFileAlone } from "../scan-files.server.ts";
 import { keepReading, knownReading } from "./keep-reading.server.ts";
 import { fileRefusal } from "./refusal-sentence.ts";
 
@@ -38,10 +38,12 @@ export async function importScanFiles(scope: ActorScope, { program, files, setti
   const [only, ...others] = files;
   if (!only) throw new Error("an import has a file");
   if (others.length > 0) return importInJob(scope, { program, files, settings });
+  const isLarge = only.bytes.length > LARGEST_ON_REQUEST;
+  const refused = isLarge ? refusedAtBeginning(only, settings) : null;
+  if (refused) return refused;
   const known = await inScope(scope, (em) => readingOfBytes(em, program, only, settings));
   if (known !== null) return { outcome: "already read", reading: known };
-  if (only.bytes.length <= LARGEST_ON_REQUEST) return importNow(scope, program, only, settings);
-  return refusedAtBeginning(only, settings) ?? importInJob(scope, { program, files, settings });
+  return isLarge ? importInJob(scope, { program, files, settings }) : importNow(scope, program, only, settings);
 }
 
 async function readingOfBytes(
@@ -50,7 +52,7 @@ async function readingOfBytes(
   { bytes }: UploadedFile,
   settings: ReadingSettings,
 ): Promise<string | null> {
-  const file = await em.findOne(ScanFile, { program, hash: sha256(bytes) }, { fields: ["id"] });
+  const file = await em.findOne(ScanFile, { program, hash: await fileHash(bytes) }, { fields: ["id"] });
   return file && knownReading(em, file.id, settings);
 }
 
