@@ -33,14 +33,21 @@ export function checkOnWafer({ points, reading }: ReadProfile, name: string, waf
     throw new ScanFileError(
       `${name}: the positions run over ${length(span)}; with ${length(wafer.edgeExclusion)} left out at either end nothing remains. Check the unit of the position, or leave out less.`,
     );
-  const heights = points.reduce(({ low, high }, { z }) => ({ low: Math.min(low, z), high: Math.max(high, z) }), {
-    low: Infinity,
-    high: -Infinity,
-  });
-  if (heights.high - heights.low > wafer.diameter / 2)
+  const differ = spread(points.z);
+  if (differ > wafer.diameter / 2)
     throw new ScanFileError(
-      `${name}: the heights differ by ${length(heights.high - heights.low)}, more than the radius of the wafer. Check the unit of the height.`,
+      `${name}: the heights differ by ${length(differ)}, more than the radius of the wafer. Check the unit of the height.`,
     );
+}
+
+function spread(values: Float64Array): number {
+  let [low, high] = [Infinity, -Infinity];
+  for (let n = 0; n < values.length; n += 1) {
+    const value = values[n] ?? 0;
+    if (value < low) low = value;
+    if (value > high) high = value;
+  }
+  return high - low;
 }
 
 /**

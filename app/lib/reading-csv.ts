@@ -1,19 +1,25 @@
 import type { ReadProfileFigures } from "#app/schemas/scan-reading.ts";
 
 /**
- * Profiles as a file that is read back without a question and without a change, to the last bit: positions and heights in metres,
- * a pair of columns each, blank where one profile is longer than the other.
+ * What is kept of profiles as a file that is read back without a question and without a change, to the last bit: positions and heights
+ * in metres, a pair of columns each, blank where one profile is longer than the other. A remark above says of which the means are kept.
+ * Nothing of the file's own words goes in, so no cell is a formula.
  */
 export function profilesCsv(profiles: ReadProfileFigures[]): string {
   const heads = profiles.flatMap(({ along }, n) => [
     `${along === "radius" ? "Radius" : "Position"} ${n + 1} [m]`,
     `Height ${n + 1} [m]`,
   ]);
+  const remarks = profiles.flatMap(({ x, points }, n) =>
+    x.length < points
+      ? [`# Profile ${n + 1}: ${x.length} means of equal stretches; the file as it came has all ${points} points`]
+      : [],
+  );
   const rows = Math.max(0, ...profiles.map(({ x }) => x.length));
   const lines = Array.from({ length: rows }, (_, row) =>
     profiles.map(({ x, z }) => `${cell(x[row])},${cell(z[row])}`).join(","),
   );
-  return [heads.join(","), ...lines].map((line) => `${line}\r\n`).join("");
+  return [...remarks, heads.join(","), ...lines].map((line) => `${line}\r\n`).join("");
 }
 
 const cell = (value: number | undefined) => (value === undefined ? "" : String(value));

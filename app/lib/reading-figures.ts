@@ -6,7 +6,7 @@ import { ScanFileError } from "./scan-reading/refusal.ts";
 import type { ScanRead } from "./scan-reading/scan-reader.ts";
 
 /**
- * What a file says, with a parabola through each of its profiles.
+ * What a file says, with a parabola through all points of each of its profiles.
  * @throws ScanFileError for a file that leaves a question open, with every question in its sentence; EngineInputError for a profile
  *   that gives no curvature
  */
@@ -25,14 +25,14 @@ export function readingFigures(fileName: string, read: ScanRead, edgeExclusion: 
 
 function fitted(profile: FileProfile, edgeExclusion: number): ReadProfileFigures {
   const { position, height, name, along } = profile;
-  const points = profilePoints(profile);
-  const [x, z] = [points.map((point) => point.x), points.map((point) => point.z)];
+  const kept = profilePoints(profile);
+  const [x, z] = [kept.map((point) => point.x), kept.map((point) => point.z)];
   const about = { position, height, name, along, points: profile.x.length, x, z };
   if (along === "radius") return { ...about, fit: null };
-  const { curvature, standardUncertainty, expandedUncertainty, rms, used, rejected, shape } = fitScan(
-    { x, z },
-    { edgeExclusion, robust: true },
-  );
+  const { curvature, standardUncertainty, expandedUncertainty, rms, used, rejected, shape } = fitScan(profile, {
+    edgeExclusion,
+    robust: true,
+  });
   return {
     ...about,
     fit: {

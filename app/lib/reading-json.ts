@@ -31,6 +31,7 @@ function profileJson({ name, along, points, x, z, fit }: ReadProfileFigures) {
     name,
     along,
     points_in_file: points,
+    points_kept: x.length < points ? "means of equal stretches" : "every point",
     fit: fit && {
       curvature_per_m: fit.curvature,
       curvature_standard_uncertainty_per_m: fit.standardUncertainty,

@@ -1,13 +1,25 @@
 import type { ReadingSettings } from "./scan-reading.ts";
+import type { ScanValues } from "./scan.ts";
 
 export const JOB_STATES = ["waiting", "running", "done", "failed", "stopped"] as const;
 export type JobState = (typeof JOB_STATES)[number];
 
+/** A file of an instrument that is in the database. */
+export interface StoredFile {
+  id: string;
+  name: string;
+  size: number;
+}
+
 /** What each kind of job is given and what it leaves behind. */
 export interface JobKinds {
   "scan files": {
-    input: { files: { id: string; name: string; size: number }[]; settings: ReadingSettings };
+    input: { files: StoredFile[]; settings: ReadingSettings };
     outcome: { files: FileOutcome[] };
+  };
+  "scan pair": {
+    input: { values: ScanValues; files: { before: StoredFile; after: StoredFile } };
+    outcome: { scan: string };
   };
 }
 export type JobKind = keyof JobKinds;

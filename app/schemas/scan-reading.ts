@@ -21,10 +21,11 @@ export interface ProfileFigures {
   notSpherical: boolean;
 }
 
-/** One profile of a file, with the points that were fitted: more than ten thousand become the means of equal stretches. */
+/** One profile of a file. All its points were fitted; what is kept of more than ten thousand are the means of equal stretches. */
 export interface ReadProfileFigures extends ColumnPair {
   /** points in the file */
   points: number;
+  /** kept: every point, or the means */
   x: number[];
   z: number[];
   /** null for half a profile, from the centre outwards, which holds no tilt to take out */

@@ -24,8 +24,8 @@ export interface Upload<Field extends string> {
   tooLarge: Partial<Record<Field, { name: string; size: number }>>;
 }
 
-/** A file up to this many times the limit is refused at its field; beyond it reading stops. */
-const STOP_READING_AT = 3;
+/** A file up to three times the limit, and not more than so much above it, bytes, is refused at its field; beyond it reading stops. */
+const MOST_ABOVE = 12 * 1024 * 1024;
 const MOST_PARTS = 60;
 
 /**
@@ -40,7 +40,7 @@ export async function readUpload<Field extends string>(
   limit: { bytes: number; words: string },
 ): Promise<Upload<Field>> {
   const upload: Omit<Upload<Field>, "formData"> = { files: {}, tooLarge: {} };
-  const maxFileSize = limit.bytes * STOP_READING_AT;
+  const maxFileSize = Math.min(3 * limit.bytes, limit.bytes + MOST_ABOVE);
   try {
     const formData = await parseFormData(
       request,

@@ -1,4 +1,4 @@
-import { filmStressFromProfiles, type FilmStressFromScans } from "#app/engine/profile/film-stress.ts";
+import { filmStressFromScans, type FilmStressFromScans } from "#app/engine/profile/film-stress.ts";
 import { fittedHeight, levelHeight } from "#app/engine/profile/fitted-height.ts";
 import { smallDeflection } from "#app/engine/profile/small-deflection.ts";
 import { siliconBiaxialModulus } from "#app/engine/silicon/biaxial-modulus.ts";
@@ -22,7 +22,7 @@ const fromTolerance = (tolerance: number | null) => (tolerance ?? 0) / Math.sqrt
  */
 export function scanResult(values: ScanSubject, before: ReadProfile, after: ReadProfile): ScanResult {
   const biaxialModulus = siliconBiaxialModulus(values.orientation);
-  const film = filmStressFromProfiles({
+  const film = filmStressFromScans({
     pre: before.points,
     post: after.points,
     edgeExclusion: values.edgeExclusion,

@@ -1,20 +1,20 @@
 import { randomUUID } from "node:crypto";
-import { UniqueConstraintViolationException } from "@mikro-orm/postgresql";
+import { UniqueConstraintViolationException, type EntityManager } from "@mikro-orm/postgresql";
 import { Film } from "#app/db/entities/film.ts";
+import type { ScanFile } from "#app/db/entities/scan-file.ts";
 import { Scan } from "#app/db/entities/scan.ts";
-import { EngineInputError } from "#app/engine/errors.ts";
 import { ENGINE_VERSION } from "#app/engine/version.ts";
 import { excerpt } from "#app/lib/excerpt.ts";
-import { checkOnWafer, checkTogether } from "#app/lib/profile-on-wafer.ts";
+import { checkOnWafer } from "#app/lib/profile-on-wafer.ts";
 import { readOneProfile, type ReadProfile } from "#app/lib/scan-reading/one-profile.ts";
 import { ScanFileError } from "#app/lib/scan-reading/refusal.ts";
-import type { FileFormat, ScanResult } from "#app/schemas/scan-result.ts";
+import type { ScanResult } from "#app/schemas/scan-result.ts";
 import type { ScanSubject, ScanValues } from "#app/schemas/scan.ts";
 import { inScope, type ActorScope } from "#app/server/scope.server.ts";
 import type { UploadedFile } from "#app/server/upload.server.ts";
 import { requireInProgram } from "./permission.server.ts";
-import { keepScanFile, sha256 } from "./scan-files.server.ts";
-import { scanResult } from "./scan-result-of.ts";
+import { fileHash, keepScanFile } from "./scan-files.server.ts";
+import { formatOf, pairRefusal, pairResult, type PairedProfile } from "./scan-pair.ts";
 
 export type Refused = { outcome: "refused"; field: "before" | "after" | "film" | ""; reason: string };
 export type Uploaded = { outcome: "stored"; id: string } | Refused;
@@ -43,7 +43,7 @@ export async function uploadReadAs(
   readAs: ReadAs,
 ): Promise<Uploaded> {
   requireInProgram(scope, "upload scans", values.program, "program");
-  const computed = computeScan(values, files, readAs);
+  const computed = await computeScan(values, files, readAs);
   if ("outcome" in computed) return computed;
   try {
     return await keepScan(scope, values, files, computed.result);
@@ -54,60 +54,75 @@ export async function uploadReadAs(
   }
 }
 
-function computeScan(values: ScanSubject, files: ScanFiles, readAs: ReadAs): { result: ScanResult } | Refused {
-  const read = (which: "before" | "after"): ReadProfile => {
-    const profile = readAs(which, files[which]);
-    checkOnWafer(profile, excerpt(files[which].name, 80), values);
-    return profile;
-  };
+async function computeScan(
+  values: ScanSubject,
+  files: ScanFiles,
+  readAs: ReadAs,
+): Promise<{ result: ScanResult } | Refused> {
   let reading: "before" | "after" = "before";
+  const read = async (which: "before" | "after"): Promise<PairedProfile> => {
+    reading = which;
+    const { name, bytes } = files[which];
+    const profile = readAs(which, files[which]);
+    checkOnWafer(profile, excerpt(name, 80), values);
+    return { name, hash: await fileHash(bytes), profile };
+  };
   try {
-    const before = read("before");
-    reading = "after";
-    if (sha256(files.before.bytes) === sha256(files.after.bytes))
-      throw new ScanFileError(
-        `${excerpt(files.after.name, 80)} holds the same bytes as the file before the film. Choose the scan after it.`,
-      );
-    const after = read("after");
-    checkTogether({ name: files.before.name, profile: before }, { name: files.after.name, profile: after }, values);
-    return { result: scanResult(values, before, after) };
+    return { result: pairResult(values, await read("before"), await read("after")) };
   } catch (error) {
-    if (error instanceof ScanFileError) return { outcome: "refused", field: reading, reason: error.message };
-    if (error instanceof EngineInputError)
-      return {
-        outcome: "refused",
-        field: "",
-        reason: `The two scans give no curvature: the ${error.field === "points" ? "points" : error.field} ${error.reason}.`,
-      };
-    throw error;
+    const reason = pairRefusal(error);
+    if (reason === null) throw error;
+    return { outcome: "refused", field: error instanceof ScanFileError ? reading : "", reason };
   }
 }
 
 function keepScan(scope: ActorScope, values: ScanSubject, files: ScanFiles, result: ScanResult): Promise<Uploaded> {
-  return inScope(scope, async (em): Promise<Uploaded> => {
-    const film = values.film ? await em.findOne(Film, { id: values.film }) : null;
-    if (values.film && !film)
-      return { outcome: "refused", field: "film", reason: "That film is no longer in the library. Choose another." };
-    const { program: _program, label: _label, film: _film, ...parameters } = values;
-    const scan = em.create(Scan, {
-      id: randomUUID(),
-      program: values.program,
-      label: values.label,
-      film,
-      before: await keepScanFile(em, scope, values.program, files.before),
-      after: await keepScanFile(em, scope, values.program, files.after),
-      parameters: { ...parameters, ...formatOf(result) },
-      result,
-      engineVersion: ENGINE_VERSION,
-      createdAt: new Date(),
-      createdBy: scope.actor.id,
-    });
-    await em.flush();
-    return { outcome: "stored", id: scan.id };
+  return inScope(scope, async (em) => {
+    // The film first: a pair that is refused leaves no file behind.
+    if (!(await filmOf(em, values))) return FILM_GONE;
+    const before = await keepScanFile(em, scope, values.program, files.before);
+    const after = await keepScanFile(em, scope, values.program, files.after);
+    return storeScan(em, scope, values, { before, after }, result);
   });
 }
 
-function formatOf({ before }: ScanResult): FileFormat {
-  if (!before.format) throw new Error("a file that was read has a format");
-  return before.format;
+const FILM_GONE: Refused = {
+  outcome: "refused",
+  field: "film",
+  reason: "That film is no longer in the library. Choose another.",
+};
+
+/** The film, or that none was named; null when it is gone. */
+async function filmOf(em: EntityManager, { film }: ScanSubject): Promise<{ film: Film | null } | null> {
+  if (film === null) return { film };
+  const found = await em.findOne(Film, { id: film });
+  return found && { film: found };
+}
+
+/** Stores a scan of two files that are kept, within a transaction that is open. */
+export async function storeScan(
+  em: EntityManager,
+  scope: ActorScope,
+  values: ScanSubject,
+  files: { before: ScanFile; after: ScanFile },
+  result: ScanResult,
+  id: string = randomUUID(),
+): Promise<Uploaded> {
+  const named = await filmOf(em, values);
+  if (!named) return FILM_GONE;
+  const { program, label, film: _film, ...parameters } = values;
+  const scan = em.create(Scan, {
+    id,
+    program,
+    label,
+    ...named,
+    ...files,
+    parameters: { ...parameters, ...formatOf(result) },
+    result,
+    engineVersion: ENGINE_VERSION,
+    createdAt: new Date(),
+    createdBy: scope.actor.id,
+  });
+  await em.flush();
+  return { outcome: "stored", id: scan.id };
 }

@@ -1,5 +1,6 @@
 import { readFileSync } from "node:fs";
 import { beforeAll, describe, expect, test, vi } from "vitest";
+import { filesOf } from "#app/lib/job-files.ts";
 import type { ActorScope } from "#app/server/scope.server.ts";
 import { leave, scopeOfPerson } from "#tests/db/people.ts";
 import { asOwner, useDatabase } from "#tests/db/test-database.ts";
@@ -21,6 +22,7 @@ beforeAll(async () => {
   program = technician.actor.memberships.find(({ programSlug }) => programSlug === "tern")?.programId ?? "";
 }, 60_000);
 
+const ALL = { query: "", filters: {} };
 const SETTINGS = { profile: {}, edgeExclusion: 0.005 };
 const monitor = readFileSync(
   new URL("../../fixtures/scans/monitor-200mm-725um-before-film-seed-7.csv", import.meta.url),
@@ -53,7 +55,7 @@ describe("a job", () => {
     await run(id);
     const job = await seen(id);
     expect(job).toMatchObject({ state: "done", done: job.total, sentence: "Two read, one refused." });
-    expect(job.outcome?.files.map(({ outcome }) => outcome)).toEqual(["read", "refused", "read"]);
+    expect(filesOf(job.outcome).map(({ outcome }) => outcome)).toEqual(["read", "refused", "read"]);
     const [stored] = await asOwner<{ files: number }>(
       database,
       "select count(*)::int as files from scan_file where name = 'bad.csv'",
@@ -151,13 +153,20 @@ describe("who may", () => {
     const { listJobs, stopJob } = await jobs();
     const { importScanFiles } = await imports();
     const id = await started();
-    await expect(listJobs(guest)).rejects.toMatchObject({ init: { status: 403 } });
+    await expect(listJobs(guest, ALL)).rejects.toMatchObject({ init: { status: 403 } });
     await expect(seen(id, guest)).rejects.toMatchObject({ init: { status: 404 } });
     await expect(stopJob(guest, id)).rejects.toMatchObject({ init: { status: 404 } });
     await expect(importScanFiles(guest, { program, files: [good()], settings: SETTINGS })).rejects.toMatchObject({
       init: { status: 404 },
     });
-    expect((await listJobs(technician)).some((job) => job.id === id)).toBe(true);
+    expect((await listJobs(technician, ALL)).some((job) => job.id === id)).toBe(true);
+    const found = async (query: string, filters: Record<string, string> = {}) =>
+      (await listJobs(technician, { query, filters })).map((job) => job.id);
+    const { title } = await seen(id);
+    expect(await found(title.slice(0, 9), { state: "waiting", program: "tern" })).toContain(id);
+    expect(await found(title, { state: "done" })).not.toContain(id);
+    expect(await found("no such file")).toEqual([]);
+    expect(await found("", { program: "somebody-elses" })).toEqual([]);
   });
 
   test("a job of somebody who has left the program fails with the reason and reads nothing", async () => {

@@ -2,6 +2,7 @@
  * `npm run bench`: how fast the engine samples, against NumPy doing the same in the same run, how long a chart's sweep, a flow's
  * sampling, walk and assessment take, how fast a scan of a million rows is read, and how large the part is that runs in the
  * browser. Prints a table; fails nothing, since times depend on the machine and what else it does.
+ * Arguments name the parts to run, all by default: 'npm run bench -- scans'.
  */
 import { assessFlow } from "../../engine/flow/assess.ts";
 import { walkFlow } from "../../engine/flow/walk.ts";
@@ -130,10 +131,7 @@ async function size() {
   }
 }
 
-compareWithNumpy();
-await sweep();
-flow();
-walks();
-longFlow();
-await scans();
-await size();
+const PARTS = { sampling: compareWithNumpy, sweep, flow, walks, "long flow": longFlow, scans, size };
+const wanted = process.argv.slice(2);
+for (const part of wanted) if (!(part in PARTS)) throw new Error(`The parts are ${Object.keys(PARTS).join(", ")}.`);
+for (const [name, part] of Object.entries(PARTS)) if (wanted.length === 0 || wanted.includes(name)) await part();

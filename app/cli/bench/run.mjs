@@ -23,5 +23,8 @@ await build({
     rollupOptions: { output: { format: "es", entryFileNames: "bench.mjs" } },
   },
 });
-const { status } = spawnSync(process.execPath, [`${outDir}/bench.mjs`], { cwd: root, stdio: "inherit" });
+const { status } = spawnSync(process.execPath, [`${outDir}/bench.mjs`, ...process.argv.slice(2)], {
+  cwd: root,
+  stdio: "inherit",
+});
 process.exitCode = status ?? 1;

@@ -5,9 +5,8 @@
  */
 import { closeSync, openSync, readFileSync, readSync } from "node:fs";
 import Papa from "papaparse";
-import { fitProfile } from "../../engine/profile/fit-profile.ts";
+import { fitScan } from "../../engine/profile/fit-scan.ts";
 import { checkOnWafer } from "../../lib/profile-on-wafer.ts";
-import { profilePoints } from "../../lib/scan-reading/profile-points.ts";
 import { scanReader } from "../../lib/scan-reading/scan-reader.ts";
 import { shortest } from "./timing.mjs";
 
@@ -32,10 +31,9 @@ function parsed() {
 function readAndFitted() {
   const { profiles, rows } = parsed();
   const [profile] = profiles;
-  const points = profilePoints(profile);
-  checkOnWafer({ points, reading: profile }, "scan.csv", WAFER);
-  const { curvature } = fitProfile(points, { edgeExclusion: WAFER.edgeExclusion, robust: true });
-  return { curvature, rows, fitted: points.length };
+  checkOnWafer({ points: profile, reading: profile }, "scan.csv", WAFER);
+  const { curvature, used } = fitScan(profile, { edgeExclusion: WAFER.edgeExclusion, robust: true });
+  return { curvature, rows, fitted: used };
 }
 
 function read(runs) {

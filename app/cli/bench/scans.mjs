@@ -47,6 +47,6 @@ export async function scans() {
   const [{ read, once, numpy }] = rounds;
   const off = (value) => Math.abs(value / CURVATURE - 1).toExponential(1);
   console.log(
-    `    memory ${Math.max(...rounds.map((round) => round.once.megabytes)).toFixed(0)} MB in a process that reads it once (wanted under 300 MB), cold ${s(once.seconds)}\n    curvature from ${read.fitted} means off by ${off(read.curvature)}${numpy ? `, NumPy's from all rows by ${off(numpy.curvature)}` : ""}`,
+    `    memory ${Math.max(...rounds.map((round) => round.once.megabytes)).toFixed(0)} MB in a process that reads it once (wanted under 300 MB), cold ${s(once.seconds)}\n    curvature from ${read.fitted} points, spikes left out, off by ${off(read.curvature)}${numpy ? `, NumPy's from the same stretch by ${off(numpy.curvature)}` : ""}`,
   );
 }

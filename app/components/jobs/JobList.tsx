@@ -1,14 +1,8 @@
-import { Form } from "react-router";
+import { Form, Link } from "react-router";
 import { fileSize } from "#app/lib/file-size.ts";
+import { filesOf, scanOf } from "#app/lib/job-files.ts";
 import type { JobRow } from "#app/schemas/job.ts";
-
-const WORDS: Record<JobRow["state"], string> = {
-  waiting: "Waiting",
-  running: "Running",
-  done: "Done",
-  failed: "Failed",
-  stopped: "Stopped",
-};
+import { JOB_WORDS } from "./job-words.ts";
 
 /** Jobs, the newest first: how far each is, how it ended and, for whoever may, what can be done with it. */
 export function JobList({ jobs }: { jobs: JobRow[] }) {
@@ -33,6 +27,7 @@ export function JobList({ jobs }: { jobs: JobRow[] }) {
 
 function JobState({ job }: { job: JobRow }) {
   const { state, sentence, done, total, title, stopAsked } = job;
+  const scan = scanOf(job.outcome);
   if (state === "running")
     return (
       <div className="mt-1 flex flex-wrap items-center gap-2">
@@ -45,15 +40,23 @@ function JobState({ job }: { job: JobRow }) {
     );
   return (
     <p className={`mt-1 break-words ${state === "failed" ? "text-stop" : ""}`}>
-      {WORDS[state]}
+      {JOB_WORDS[state]}
       {sentence && `. ${sentence}`}
+      {scan !== null && (
+        <>
+          {" "}
+          <Link to={`/scans/${scan}`} className="link">
+            Open the scan<span className="sr-only"> of {title}</span>
+          </Link>
+        </>
+      )}
     </p>
   );
 }
 
 /** Of a job that is done, the files that stay as they are, each with its reason. */
 function FilesRefused({ job: { outcome } }: { job: JobRow }) {
-  const refused = (outcome?.files ?? []).flatMap((file) => (file.outcome === "refused" ? file : []));
+  const refused = filesOf(outcome).flatMap((file) => (file.outcome === "refused" ? file : []));
   if (refused.length === 0) return null;
   return (
     <ul className="mt-1 list-disc pl-5">

@@ -105,7 +105,10 @@ export function ScanForm({ programs, films, lastResult }: Props) {
         <Link to="/scans" className="btn">
           Leave without saving
         </Link>
-        <p className="text-quiet">Both files are kept as they are. A pair that cannot be read is not stored.</p>
+        <p className="text-quiet">
+          Both files are kept as they are; a pair that cannot be read is not stored. Beyond 1&nbsp;MB a pair is read in
+          the background, and you can leave.
+        </p>
       </div>
     </Form>
   );

@@ -9,10 +9,12 @@ interface Props {
   file: ScanFileView;
   reading: FileReading;
   parameters: ScanParameters;
+  /** points that are kept of the curves */
+  drawn: number;
 }
 
 /** How one file was read, what of it could not be, and the file itself. */
-export function ScanReading({ which, file, reading, parameters }: Props) {
+export function ScanReading({ which, file, reading, parameters, drawn }: Props) {
   const { rows, used, columns, heading, delimiter, skipped, skippedInAll, averagedTo } = reading;
   const { decimalMark, positionUnit, heightUnit } = reading.format ?? parameters;
   const [position, height] = reading.readColumns ?? [0, 1];
@@ -33,7 +35,9 @@ export function ScanReading({ which, file, reading, parameters }: Props) {
         {heading ? `Heading “${heading}”.` : "No heading."}
         {(columns > 2 || position > height) &&
           ` Of ${columns} columns, column ${position + 1} was read as the position and column ${height + 1} as the height.`}
-        {averagedTo !== undefined && ` The fit was given ${averagedTo} means of neighbouring points.`}
+        {averagedTo !== undefined
+          ? ` The fit was given ${averagedTo} means of neighbouring points.`
+          : used > drawn && ` The fit was given every point; ${drawn} are kept of the curves, for drawing.`}
       </p>
       {skippedInAll > 0 && (
         <details className="mt-1">

@@ -86,3 +86,15 @@ export function columnsOf(points: readonly { x: number; z: number }[]): { x: Flo
   });
   return { x, z };
 }
+
+/** The values of which `keep` is 1, in order; the column itself when that is all of them. */
+export function kept(values: Float64Array, keep: Uint8Array): Float64Array {
+  const out = new Float64Array(values.length);
+  let count = 0;
+  for (let n = 0; n < values.length; n += 1) {
+    if (keep[n] !== 1) continue;
+    out[count] = values[n] ?? 0;
+    count += 1;
+  }
+  return count === values.length ? values : out.subarray(0, count);
+}

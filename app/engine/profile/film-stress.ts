@@ -1,7 +1,7 @@
 import { requireModulus, requireThickness, requireWithin } from "../inputs.ts";
 import { stoneyStress } from "../stoney/stoney.ts";
 import { combineUncertainty, type CombinedUncertainty } from "../uncertainty/combine.ts";
-import { columnsOf, type ScanColumns } from "./columns.ts";
+import { columnsOf, kept, type ScanColumns } from "./columns.ts";
 import { fitScan, type ProfileFit } from "./fit-scan.ts";
 import { interpolationError, matchScans, type MatchedScans } from "./match-scans.ts";
 import type { ProfilePoint } from "./points.ts";
@@ -95,7 +95,8 @@ export interface FilmStressFromScans extends CombinedUncertainty {
 export function filmStressFromScans(i: FilmStressFromScansInput): FilmStressFromScans {
   checkMonitor(i);
   const matched = matchScans(i.pre, i.post);
-  const change = Float64Array.from(matched.after, (after, n) => after - (matched.before[n] ?? 0));
+  const change = new Float64Array(matched.x.length);
+  for (let n = 0; n < change.length; n += 1) change[n] = (matched.after[n] ?? 0) - (matched.before[n] ?? 0);
   const difference = fitScan({ x: matched.x, z: change }, i);
   const kept = without(matched, difference.rejected);
   const alone = { edgeExclusion: i.edgeExclusion };
@@ -122,8 +123,7 @@ function without(matched: MatchedScans, rejected: readonly number[]): MatchedSca
   if (rejected.length === 0) return matched;
   const keep = new Uint8Array(matched.x.length).fill(1);
   for (const n of rejected) keep[n] = 0;
-  const kept = (values: Float64Array) => values.filter((_, n) => keep[n] === 1);
-  return { ...matched, x: kept(matched.x), before: kept(matched.before), after: kept(matched.after) };
+  return { ...matched, x: kept(matched.x, keep), before: kept(matched.before, keep), after: kept(matched.after, keep) };
 }
 
 function checkMonitor(i: MonitorWafer): void {

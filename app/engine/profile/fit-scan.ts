@@ -2,11 +2,11 @@ import { EngineInputError } from "../errors.ts";
 import { requireWithin } from "../inputs.ts";
 import { studentFactor } from "../uncertainty/student.ts";
 import { fitCircle } from "./circle.ts";
-import { ascendingColumns, distinctUpTo, firstFrom, type ScanColumns } from "./columns.ts";
+import { ascendingColumns, distinctUpTo, firstFrom, kept, type ScanColumns } from "./columns.ts";
 import { plainParabola, polynomialBasis, takeOut, type PolynomialBasis } from "./orthogonal-polynomials.ts";
 import { FEWEST_POINTS, requireEnough } from "./points.ts";
 import { pointsOnParabola } from "./robust-points.ts";
-import { scatterOf, type Scatter } from "./scatter.ts";
+import { scatterOf, SHAPE, type Scatter } from "./scatter.ts";
 import { gapsIn, rejectedRuns, type RejectedRun, type ScanGap } from "./scan-features.ts";
 
 export interface ProfileFit {
@@ -92,10 +92,11 @@ export function fitScan(scan: ScanColumns, o: FitOptions): ProfileFit {
   const all = ascendingColumns("points", scan);
   const [low, high] = insideEdges(all.x, o.edgeExclusion);
   const [x, z] = [all.x.subarray(low, high), all.z.subarray(low, high)];
-  const keep = o.robust ? pointsOnParabola(scaled(x).t, z) : null;
+  const whole = scaled(x);
+  const keep = o.robust ? pointsOnParabola(whole.t, z) : null;
   const [keptX, keptZ] = keep ? [kept(x, keep), kept(z, keep)] : [x, z];
   requireEnough("points", distinctUpTo(keptX, FEWEST_POINTS));
-  const fit = fitColumns(keptX, keptZ);
+  const fit = fitColumns(keptX === x ? whole : scaled(keptX), keptZ);
   if (!keep || keptX.length === x.length) return { ...fit, gaps: gapsIn(x) };
   const rejected: number[] = [];
   for (let n = 0; n < keep.length; n += 1) if (keep[n] === 0) rejected.push(all.order?.[low + n] ?? low + n);
@@ -125,18 +126,14 @@ function insideEdges(x: Float64Array, edgeExclusion: number): [number, number] {
   return [low, high];
 }
 
-function kept(values: Float64Array, keep: Uint8Array): Float64Array {
-  const out = new Float64Array(values.length);
-  let count = 0;
-  for (let n = 0; n < values.length; n += 1) {
-    if (keep[n] !== 1) continue;
-    out[count] = values[n] ?? 0;
-    count += 1;
-  }
-  return count === values.length ? values : out.subarray(0, count);
+/** Positions from −1 to 1 over a scan, and how they came from those on the wafer, m. */
+interface Scaled {
+  t: Float64Array;
+  centre: number;
+  halfWidth: number;
 }
 
-function scaled(x: Float64Array): { t: Float64Array; centre: number; halfWidth: number } {
+function scaled(x: Float64Array): Scaled {
   const [first, last] = [x[0] ?? 0, x[x.length - 1] ?? 0];
   const [centre, halfWidth] = [(first + last) / 2, (last - first) / 2];
   const t = new Float64Array(x.length);
@@ -144,20 +141,21 @@ function scaled(x: Float64Array): { t: Float64Array; centre: number; halfWidth: 
   return { t, centre, halfWidth };
 }
 
-function fitColumns(x: Float64Array, z: Float64Array): ProfileFit {
-  const { t, centre, halfWidth } = scaled(x);
-  const basis = polynomialBasis(t, 4);
-  const residuals = Float64Array.from(z);
+function fitColumns({ t, centre, halfWidth }: Scaled, z: Float64Array): ProfileFit {
+  const basis = polynomialBasis(t, SHAPE);
+  const residuals = z.slice();
   const shares = takeOut(basis, t, residuals, 0, 2);
   const [c0, c1, c2] = plainParabola(basis, shares);
-  const scatter = scatterOf(t, residuals, basis);
+  const rest = residuals.slice();
+  const [cubicHeight = 0, quarticHeight = 0] = takeOut(basis, t, rest, 3, SHAPE);
+  const scatter = scatterOf(t, residuals, rest);
   const slope = c1 / halfWidth;
   const perCoefficient = 2 / halfWidth ** 2 / (1 + slope * slope) ** 1.5;
   const steep = Math.abs(slope) + (2 * Math.abs(c2)) / halfWidth > STEEP;
   const curved = steep ? fitCircle(t, z, basis, halfWidth) : { curvature: c2 * perCoefficient, slope, offset: c0 };
   const standardUncertainty =
     (scatter.standardDeviation * scatter.inflation * perCoefficient) / Math.sqrt(basis.squares[2] ?? 1);
-  const shape = shapeTest(t, residuals, basis, scatter, c2);
+  const shape = shapeTest({ cubicHeight, quarticHeight }, rest, basis, scatter, c2);
   const fit: ProfileFit = {
     centre,
     halfWidth,
@@ -166,12 +164,12 @@ function fitColumns(x: Float64Array, z: Float64Array): ProfileFit {
     standardUncertainty,
     expandedUncertainty: scatter.coverageFactor * standardUncertainty,
     tilt: Math.atan(curved.slope),
-    rms: scatter.standardDeviation * Math.sqrt((x.length - 3) / x.length),
+    rms: scatter.standardDeviation * Math.sqrt((t.length - 3) / t.length),
     scatter,
     quartic: share(shape.quarticHeight, c2),
     shape,
     steep,
-    used: x.length,
+    used: t.length,
     rejected: [],
     runs: [],
     gaps: [],
@@ -184,18 +182,17 @@ function fitColumns(x: Float64Array, z: Float64Array): ProfileFit {
 
 const share = (c4: number, c2: number) => (c4 === 0 ? 0 : c4 / (Math.abs(c4) + Math.abs(c2)));
 
-/** The third and fourth order in what the parabola left, against the scatter. Takes them out of `residuals`. */
+/** The third and fourth order in what the parabola left, against the scatter; `rest` is what all of them left. */
 function shapeTest(
-  t: Float64Array,
-  residuals: Float64Array,
+  { cubicHeight, quarticHeight }: Pick<ShapeTest, "cubicHeight" | "quarticHeight">,
+  rest: Float64Array,
   basis: PolynomialBasis,
   scatter: Scatter,
   c2: number,
 ): ShapeTest {
-  const [cubicHeight = 0, quarticHeight = 0] = takeOut(basis, t, residuals, 3, 4);
-  const free = Math.max(t.length - 5, 1);
+  const free = Math.max(rest.length - 5, 1);
   let squares = 0;
-  for (let n = 0; n < residuals.length; n += 1) squares += (residuals[n] ?? 0) ** 2;
+  for (let n = 0; n < rest.length; n += 1) squares += (rest[n] ?? 0) ** 2;
   // The shape itself must not count as scatter here, unless the scatter goes together and was told without it.
   const slow = scatter.inflation > 1;
   const deviation = slow ? scatter.standardDeviation * scatter.inflation : Math.sqrt(squares / free);

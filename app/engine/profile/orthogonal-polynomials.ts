@@ -23,24 +23,24 @@ export function polynomialBasis(t: Float64Array, degree: number): PolynomialBasi
     squares: new Float64Array(degree + 1),
   };
   let before = new Float64Array(t.length);
-  let current = new Float64Array(t.length).fill(1);
+  let current = new Float64Array(t.length);
+  let [alpha, beta] = [0, 0];
   for (let j = 0; j <= degree; j += 1) {
     let square = 0;
     let moment = 0;
     for (let n = 0; n < t.length; n += 1) {
-      const p = current[n] ?? 0;
+      const at = t[n] ?? 0;
+      const p = j === 0 ? 1 : (at - alpha) * (current[n] ?? 0) - beta * (before[n] ?? 0);
+      before[n] = p;
       square += p * p;
-      moment += p * p * (t[n] ?? 0);
+      moment += p * p * at;
     }
-    const alpha = moment / square;
-    const beta = j === 0 ? 0 : square / (basis.squares[j - 1] ?? 1);
+    [before, current] = [current, before];
+    alpha = moment / square;
+    beta = j === 0 ? 0 : square / (basis.squares[j - 1] ?? 1);
     basis.squares[j] = square;
     basis.alpha[j] = alpha;
     basis.beta[j] = beta;
-    if (j === degree) break;
-    for (let n = 0; n < t.length; n += 1)
-      before[n] = ((t[n] ?? 0) - alpha) * (current[n] ?? 0) - beta * (before[n] ?? 0);
-    [before, current] = [current, before];
   }
   return basis;
 }

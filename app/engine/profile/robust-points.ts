@@ -12,11 +12,14 @@ const NORMAL_OVER_MEDIAN = 1.4826;
 const NORMAL_OVER_MEAN = 1.2533;
 /** Stretches of the scan whose medians start the fit; all their triples are tried. */
 const STRETCHES = 20;
-/** Points on which the parabola is settled at most, evenly spread; all are judged by it. */
+/** A scan with twice as many points or more is begun on about so many of them, evenly spread, and settled on all. */
 const SAMPLED = 65536;
 const MOST_ROUNDS = 50;
-/** Rounds in which the scatter is measured anew; then it stays, so that the weights settle. */
+/** Rounds in which the scatter is measured anew; then it stays, so that the weights settle. Fewer where a sample has settled before. */
 const SCALE_ROUNDS = 4;
+const SCALE_ROUNDS_AFTER_SAMPLE = 2;
+/** A parabola that moves by less than this share of how far off a point may lie leaves every point on its side. */
+const SETTLED = 1e-5;
 
 /** c_0 + c_1 t + c_2 t² */
 type Parabola = readonly [number, number, number];
@@ -28,39 +31,50 @@ type Parabola = readonly [number, number, number];
  * The start is the parabola through the medians of three of 20 stretches that has the least median of squared deviations
  * (Rousseeuw 1984) over all stretches: it stands up to nearly half of them being wrong, at an end too. From there
  * iterated least squares with Tukey's bisquare weights, the scatter by the median absolute deviation.
- * A step is told when fewer than half of the points lie beyond it. Of a long scan 65,536 to twice as many points, evenly spread, settle
- * the parabola by which all are judged.
+ * A step is told when fewer than half of the points lie beyond it.
  */
 export function pointsOnParabola(t: Float64Array, z: Float64Array): Uint8Array {
-  const stride = Math.max(1, Math.floor(t.length / SAMPLED));
-  const { parabola, limit } = settled(thinned(t, stride), thinned(z, stride));
+  const { parabola, limit } = settledOnAll(t, z);
   const keep = new Uint8Array(t.length);
   for (let n = 0; n < t.length; n += 1) keep[n] = Math.abs(off(parabola, t[n] ?? 0, z[n] ?? 0)) <= limit ? 1 : 0;
   return keep;
 }
 
+/** The parabola that most points follow. */
+function settledOnAll(t: Float64Array, z: Float64Array): Settled {
+  const stride = Math.floor(t.length / SAMPLED);
+  if (stride < 2) return settled(t, z, leastMedian(t, z), SCALE_ROUNDS);
+  const [sampleT, sampleZ] = [thinned(t, stride), thinned(z, stride)];
+  const start = settled(sampleT, sampleZ, leastMedian(sampleT, sampleZ), SCALE_ROUNDS);
+  return settled(t, z, start.parabola, SCALE_ROUNDS_AFTER_SAMPLE);
+}
+
 function thinned(values: Float64Array, stride: number): Float64Array {
-  if (stride === 1) return values;
   const out = new Float64Array(Math.ceil(values.length / stride));
   for (let n = 0; n < out.length; n += 1) out[n] = values[n * stride] ?? 0;
   return out;
 }
 
-/** The parabola that most points follow, and how far off a point may lie. */
-function settled(t: Float64Array, z: Float64Array): { parabola: Parabola; limit: number } {
+interface Settled {
+  parabola: Parabola;
+  /** how far off a point may lie, m */
+  limit: number;
+}
+
+function settled(t: Float64Array, z: Float64Array, start: Parabola, scaleRounds: number): Settled {
   const room = new Float64Array(t.length);
   // A perfect parabola leaves rounding only, which is no scatter to judge points by.
   let largest = 0;
   for (let n = 0; n < z.length; n += 1) largest = Math.max(largest, Math.abs(z[n] ?? 0));
   const rounding = 1e-12 * largest;
-  let parabola = leastMedian(t, z);
+  let parabola = start;
   let limit = 0;
   for (let round = 0; round < MOST_ROUNDS; round += 1) {
-    if (round < SCALE_ROUNDS) limit = Math.max(BISQUARE * scatterAbout(parabola, t, z, room), rounding);
+    if (round < scaleRounds) limit = Math.max(BISQUARE * scatterAbout(parabola, t, z, room), rounding);
     const next = weightedRound(parabola, t, z, limit);
     const moved = next === null ? 0 : Math.max(...next.map((value, n) => Math.abs(value - (parabola[n] ?? 0))));
     if (next !== null) parabola = next;
-    if (round >= SCALE_ROUNDS && moved <= 1e-9 * limit) break;
+    if (round >= scaleRounds && moved <= SETTLED * limit) break;
   }
   return { parabola, limit };
 }

@@ -1,5 +1,5 @@
 import { studentFactor, varianceRatioBeyond } from "../uncertainty/student.ts";
-import { polynomialBasis, takeOut, type PolynomialBasis } from "./orthogonal-polynomials.ts";
+import { polynomialBasis, takeOut } from "./orthogonal-polynomials.ts";
 
 /** What the residuals of a fit say about the scatter of its heights. */
 export interface Scatter {
@@ -27,7 +27,7 @@ const FEWEST_PROBES = 6;
 /** Stretches to which a long scan is condensed for them. */
 const STRETCHES = 2048;
 /** Highest degree of the shape, which is not taken for scatter. */
-const SHAPE = 4;
+export const SHAPE = 4;
 /** Mean wave number of a Legendre polynomial over its degree plus a half, in units of half the scan; own estimate. */
 const WAVES = 1.25;
 /** Longest memory that is led back, as a share of half the scan. */
@@ -48,9 +48,10 @@ const SUSPICION = 0.1;
  * Source: orthonormal series estimate of a long-run variance, Müller 2007, from memory; arrangement own.
  *
  * @param t ascending positions scaled to −1 to 1
- * @param residuals after the parabola; left as they are
+ * @param residuals after the parabola
+ * @param rest the same with the third and fourth order out
  */
-export function scatterOf(t: Float64Array, residuals: Float64Array, basis: PolynomialBasis): Scatter {
+export function scatterOf(t: Float64Array, residuals: Float64Array, rest: Float64Array): Scatter {
   const free = t.length - 3;
   let squares = 0;
   for (let n = 0; n < residuals.length; n += 1) squares += (residuals[n] ?? 0) ** 2;
@@ -68,8 +69,6 @@ export function scatterOf(t: Float64Array, residuals: Float64Array, basis: Polyn
     Math.floor(free / 3),
   );
   if (variance === 0) return { ...white, coverageFactor: studentFactor(free) };
-  const rest = Float64Array.from(residuals);
-  takeOut(basis, t, rest, 3, SHAPE);
   const neighbours = neighbourCorrelation(rest);
   if (probes < FEWEST_PROBES) return { ...white, neighbours, coverageFactor: studentFactor(free) };
   const slow = towardsSlower(slowVariance(t, rest, probes), variance, t.length, probes);

@@ -15,14 +15,17 @@ const GROUPED: Record<Exclude<Thousands, "none">, RegExp> = {
 const GROUP_SIGNS = /[,. \u00A0\u202F\u2009'\u2019]/g;
 
 const [PLUS, COMMA, MINUS, DOT, ZERO, NINE, BLANK] = [43, 44, 45, 46, 48, 57, 32];
-/** A whole number of so many digits and a power of ten up to 22 are both exact, so their quotient is rounded once. */
+/** A whole number of so many digits and a power of ten up to 22 are both exact, so their product or quotient is rounded once. */
 const EXACT_DIGITS = 15;
-const POWERS = Float64Array.from({ length: EXACT_DIGITS + 1 }, (_, n) => 10 ** n);
+const EXACT_POWERS = 22;
+const POWERS = Float64Array.from({ length: EXACT_POWERS + 1 }, (_, n) => 10 ** n);
+/** what begins a power of ten, and the bit that makes a letter small */
+const [LETTER_D, LETTER_E, SMALL] = [100, 101, 32];
 
 const plain = (cell: string) => cell.trim().replace("\u2212", "-");
 
 /**
- * A number of up to 15 digits without a power of ten, as almost every cell of a scan is; NaN for all else, which may still be a
+ * A number of up to 15 digits and a small power of ten, as almost every cell of a scan is; NaN for all else, which may still be a
  * number. It gives the double that the language's own conversion gives, in a third of its time.
  */
 function shortNumber(cell: string, mark: number): number {
@@ -35,16 +38,37 @@ function shortNumber(cell: string, mark: number): number {
   const start = at;
   let whole = 0;
   let markAt = -1;
+  let power = 0;
   for (; at < end; at += 1) {
     const code = cell.charCodeAt(at);
     if (code >= ZERO && code <= NINE) whole = whole * 10 + (code - ZERO);
     else if (code === mark && markAt < 0) markAt = at;
-    else return NaN;
+    else {
+      power = powerAt(cell, at, end);
+      break;
+    }
   }
-  const digits = markAt < 0 ? end - start : end - start - 1;
+  const digits = markAt < 0 ? at - start : at - start - 1;
   if (digits < 1 || digits > EXACT_DIGITS) return NaN;
-  const value = markAt < 0 ? whole : whole / (POWERS[end - markAt - 1] ?? NaN);
+  if (markAt >= 0) power -= at - markAt - 1;
+  const value = power < 0 ? whole / (POWERS[-power] ?? NaN) : whole * (POWERS[power] ?? NaN);
   return sign === MINUS ? -value : value;
+}
+
+/** The power of ten that a cell ends with, 'e-06'; NaN when that is none of up to two digits. */
+function powerAt(cell: string, from: number, end: number): number {
+  const letter = cell.charCodeAt(from) | SMALL;
+  if (letter !== LETTER_E && letter !== LETTER_D) return NaN;
+  const sign = cell.charCodeAt(from + 1);
+  let at = sign === MINUS || sign === PLUS ? from + 2 : from + 1;
+  if (at >= end || end - at > 2) return NaN;
+  let power = 0;
+  for (; at < end; at += 1) {
+    const code = cell.charCodeAt(at);
+    if (code < ZERO || code > NINE) return NaN;
+    power = power * 10 + (code - ZERO);
+  }
+  return sign === MINUS ? -power : power;
 }
 
 function pointNumber(cell: string): number {
@@ -61,7 +85,10 @@ function slowNumber(text: string): number {
 /** A comma sets off decimals, so something follows it. */
 function commaNumber(cell: string): number {
   const value = shortNumber(cell, COMMA);
-  if (value === value) return cell.trimEnd().endsWith(",") ? NaN : value;
+  if (value === value) {
+    const after = cell.charCodeAt(cell.indexOf(",") + 1);
+    return !cell.includes(",") || (after >= ZERO && after <= NINE) ? value : NaN;
+  }
   const text = plain(cell);
   return /\.|,(?!\d)/.test(text) ? NaN : slowNumber(text.replace(",", "."));
 }

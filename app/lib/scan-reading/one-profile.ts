@@ -1,16 +1,14 @@
-import type { ProfilePoint } from "#app/engine/profile/points.ts";
 import { excerpt } from "#app/lib/excerpt.ts";
 import type { ImportProfile } from "#app/schemas/import-profile.ts";
 import type { FileFormat, FileReading, SkippedRow } from "#app/schemas/scan-result.ts";
-import { profilePoints } from "./profile-points.ts";
 import type { FileProfile, ProfileFile } from "./profile-rows.ts";
 import { LENGTH_UNITS, type Reading } from "./reading.ts";
 import { ScanFileError } from "./refusal.ts";
 import { readScanFile, type ScanRead } from "./scan-reader.ts";
 
-/** The only profile of a file: its points for the engine, and how the file was understood. */
+/** The only profile of a file: all its points for the engine, and how the file was understood. */
 export interface ReadProfile {
-  points: ProfilePoint[];
+  points: { x: Float64Array; z: Float64Array };
   reading: FileReading;
 }
 
@@ -22,18 +20,26 @@ const LONGEST_HEAD = 80;
  * @throws ScanFileError with a sentence that says what is wrong, where, and what to do
  */
 export function readOneProfile(bytes: Uint8Array, fileName: string, stated: FileFormat): ReadProfile {
-  const name = excerpt(fileName, LONGEST_HEAD);
-  const { positionUnit, heightUnit, decimalMark } = stated;
-  const profile: ImportProfile = { decimalMark, units: { position: positionUnit, height: heightUnit } };
-  let read = readScanFile(bytes, fileName, profile);
-  if (isOnlyUnheaded(read)) {
-    const columns: ImportProfile["columns"] = [
-      { index: 0, role: "position" },
-      { index: 1, role: "height" },
-    ];
-    read = readScanFile(bytes, fileName, { ...profile, columns });
-  }
-  return onlyProfile(read, name);
+  const profile = statedProfile(stated);
+  const read = readScanFile(bytes, fileName, profile);
+  const unheaded = unheadedProfile(read, profile);
+  return onlyProfile(unheaded ? readScanFile(bytes, fileName, unheaded) : read, fileName);
+}
+
+/** What is stated, as an import profile. */
+export const statedProfile = ({ positionUnit, heightUnit, decimalMark }: FileFormat): ImportProfile => ({
+  decimalMark,
+  units: { position: positionUnit, height: heightUnit },
+});
+
+/** The profile to read a file by again of which nothing tells the columns; null when they are told. */
+export function unheadedProfile(read: ScanRead, profile: ImportProfile): ImportProfile | null {
+  if (!isOnlyUnheaded(read)) return null;
+  const columns: ImportProfile["columns"] = [
+    { index: 0, role: "position" },
+    { index: 1, role: "height" },
+  ];
+  return { ...profile, columns };
 }
 
 /**
@@ -41,10 +47,15 @@ export function readOneProfile(bytes: Uint8Array, fileName: string, stated: File
  * @throws ScanFileError with a sentence that says what is wrong, or still open, where, and what to do
  */
 export function readProfileBy(bytes: Uint8Array, fileName: string, profile: ImportProfile): ReadProfile {
-  return onlyProfile(readScanFile(bytes, fileName, profile), excerpt(fileName, LONGEST_HEAD));
+  return onlyProfile(readScanFile(bytes, fileName, profile), fileName);
 }
 
-function onlyProfile(read: ScanRead, name: string): ReadProfile {
+/**
+ * The only profile of a file that was read.
+ * @throws ScanFileError when it holds none or several, or leaves open what they are
+ */
+export function onlyProfile(read: ScanRead, fileName: string): ReadProfile {
+  const name = excerpt(fileName, LONGEST_HEAD);
   const { kind, ambiguities } = read.reading;
   if (kind !== "profiles")
     throw new ScanFileError(`${name} is a ${kind}, not a profile. Choose the scan, position and height in a row.`);
@@ -57,8 +68,7 @@ function onlyProfile(read: ScanRead, name: string): ReadProfile {
     throw new ScanFileError(
       `${name} holds ${read.content.profiles.length} profiles: ${read.content.profiles.map((each) => `“${excerpt(each.name, 30)}”`).join(", ")}. Export the one that is meant to a file of its own.`,
     );
-  const points = profilePoints(only);
-  return { points, reading: fileReading(read.reading, read.content, only, points.length) };
+  return { points: { x: only.x, z: only.z }, reading: fileReading(read.reading, read.content, only) };
 }
 
 /** Nothing but the columns is open, and no head says anything of them. */
@@ -71,7 +81,7 @@ function isOnlyUnheaded({ outcome, reading }: ScanRead): boolean {
   );
 }
 
-function fileReading(reading: Reading, content: ProfileFile, profile: FileProfile, points: number): FileReading {
+function fileReading(reading: Reading, content: ProfileFile, profile: FileProfile): FileReading {
   const { position, height, x, from, to } = profile;
   const unitAt = (column: number) => LENGTH_UNITS.find((unit) => unit === reading.columns[column]?.unit) ?? "m";
   const heads = [position, height].map((column) => reading.columns[column]?.heading ?? "");
@@ -90,7 +100,6 @@ function fileReading(reading: Reading, content: ProfileFile, profile: FileProfil
     to,
     skipped,
     skippedInAll: content.faulty,
-    ...(points < x.length ? { averagedTo: points } : {}),
     // A file without any mark reads the same under either.
     format: {
       positionUnit: unitAt(position),

@@ -1,16 +1,16 @@
 import type { ProfilePoint } from "#app/engine/profile/points.ts";
 
-/** Points that a fit is given; instruments write far more than a parabola or its residuals can show. */
-export const FITTED_POINTS = 10_000;
+/** Points that are kept of a profile beside its figures; instruments write far more than a curve can show. */
+export const KEPT_POINTS = 10_000;
 
 /**
- * The points of a profile for the engine. More than `most` become the means of equal stretches: a parabola keeps its curvature
- * to 1e-9, because a stretch is so short that its own sagitta is the same everywhere, and scatter falls as for any mean.
+ * The points of a profile for drawing and keeping; a fit is given all of them instead. More than `most` become the means of equal
+ * stretches: their parabola has the same curvature to 1e-9, because a stretch is so short that its own sagitta is the same everywhere.
  * @param profile SI, in any order
  */
 export function profilePoints(
   { x, z, from, to }: { x: Float64Array; z: Float64Array; from: number; to: number },
-  most = FITTED_POINTS,
+  most = KEPT_POINTS,
 ): ProfilePoint[] {
   if (x.length <= most || from === to) return Array.from(x, (position, n) => ({ x: position, z: z[n] ?? 0 }));
   const [positions, heights, counts] = [new Float64Array(most), new Float64Array(most), new Uint32Array(most)];

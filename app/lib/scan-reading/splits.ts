@@ -1,5 +1,6 @@
 import { isMissing, looksNumeric } from "./numbers.ts";
 import { DELIMITERS, type DecimalMark } from "./reading.ts";
+import { ScanFileError } from "./refusal.ts";
 import { rowsOf } from "./row-source.ts";
 
 /** Lines from which the layout is told. */
@@ -51,14 +52,24 @@ function bestOf(
   mark: DecimalMark | null,
   groupedByBlanks: readonly string[],
 ): Split {
-  const [first, ...others] = candidates.map((delimiter) =>
-    splitAt(name, text, delimiter, mark, groupedByBlanks.includes(delimiter)),
-  );
-  if (!first) throw new Error("there is always a delimiter to try");
+  let refusal: unknown = null;
+  const [first, ...others] = candidates.flatMap((delimiter) => {
+    try {
+      return splitAt(name, text, delimiter, mark, groupedByBlanks.includes(delimiter));
+    } catch (error) {
+      // A quotation mark that closes before a comma never does where blanks are tried.
+      if (!(error instanceof ScanFileError)) throw error;
+      refusal ??= error;
+      return [];
+    }
+  });
+  if (!first) throw refusal ?? new Error("there is always a delimiter to try");
   const tabs = [first, ...others].some(({ delimiter, score }) => delimiter === "\t" && score > 0);
-  return others
+  const best = others
     .filter(({ delimiter }) => !(tabs && delimiter === " "))
-    .reduce((best, next) => (next.score > best.score * (1 + 1e-9) ? next : best), first);
+    .reduce((found, next) => (next.score > found.score * (1 + 1e-9) ? next : found), first);
+  if (best.score === 0 && refusal !== null) throw refusal;
+  return best;
 }
 
 function splitAt(name: string, text: string, delimiter: string, mark: DecimalMark | null, blanksGroup: boolean): Split {

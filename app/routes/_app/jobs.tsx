@@ -1,20 +1,34 @@
 import { redirect } from "react-router";
 import { JobList } from "#app/components/jobs/JobList.tsx";
+import { JOB_WORDS } from "#app/components/jobs/job-words.ts";
 import { useLookingAgain } from "#app/components/jobs/use-looking-again.ts";
 import { PageHead } from "#app/components/layout/PageHead.tsx";
 import { EmptyState } from "#app/components/ui/EmptyState.tsx";
+import { ListHead } from "#app/components/ui/ListHead.tsx";
+import { readListParams } from "#app/lib/list-params.ts";
+import { KEPT_POINTS } from "#app/lib/scan-reading/profile-points.ts";
+import { programsWhere } from "#app/policies/permissions.ts";
+import { JOB_STATES } from "#app/schemas/job.ts";
 import { scopeOf } from "#app/server/contexts.server.ts";
 import { problem } from "#app/server/problem.server.ts";
-import { listJobs, startJobAgain, stopJob } from "#app/services/jobs/jobs.server.ts";
+import { JOB_SORTS, listJobs, startJobAgain, stopJob } from "#app/services/jobs/jobs.server.ts";
 import type { Route } from "./+types/jobs";
 
 export const meta: Route.MetaFunction = () => [{ title: "Work under way · Planeward" }];
 
-export async function loader({ context }: Route.LoaderArgs) {
-  return { jobs: await listJobs(scopeOf(context)) };
+export async function loader({ context, url }: Route.LoaderArgs) {
+  const scope = scopeOf(context);
+  const params = readListParams(url.searchParams, { sorts: JOB_SORTS, filters: ["program", "state"] });
+  const jobs = await listJobs(scope, params);
+  const programs = programsWhere(scope.actor, "see the work");
+  return {
+    jobs,
+    programs: programs.map(({ programName, programSlug }) => ({ value: programSlug, label: programName })),
+    searched: params.query !== "" || Object.values(params.filters).some(Boolean),
+  };
 }
 
-export async function action({ request, context }: Route.ActionArgs) {
+export async function action({ request, context, url }: Route.ActionArgs) {
   const form = await request.formData();
   const id = String(form.get("job") ?? "");
   switch (form.get("intent")) {
@@ -27,10 +41,10 @@ export async function action({ request, context }: Route.ActionArgs) {
     default:
       throw problem(400, "This form could not be read. Open the page again and send it once more.");
   }
-  throw redirect("/jobs");
+  throw redirect(`/jobs${url.search}`);
 }
 
-export default function Jobs({ loaderData: { jobs } }: Route.ComponentProps) {
+export default function Jobs({ loaderData: { jobs, programs, searched } }: Route.ComponentProps) {
   const underWay = jobs.filter(({ state }) => state === "waiting" || state === "running").length;
   useLookingAgain(underWay > 0);
   return (
@@ -39,12 +53,36 @@ export default function Jobs({ loaderData: { jobs } }: Route.ComponentProps) {
         title="Work under way"
         crumbs={[{ name: "Scans", path: "/scans" }]}
         remark={underWay === 0 ? "Nothing is waiting or running" : `${underWay} waiting or running`}
+        actions={
+          underWay > 0 && (
+            <noscript>
+              <a href="/jobs" className="btn">
+                Look again
+              </a>
+            </noscript>
+          )
+        }
+      />
+      <ListHead
+        what="files, wafers and people"
+        filters={[
+          { name: "program", label: "Program", options: programs },
+          { name: "state", label: "State", options: JOB_STATES.map((value) => ({ value, label: JOB_WORDS[value] })) },
+        ]}
       />
       {jobs.length > 0 ? (
-        <JobList jobs={jobs} />
+        <>
+          <JobList jobs={jobs} />
+          <p className="text-label text-quiet">
+            Every file is kept as it came, and every point of it is fitted. Of a profile with more than {KEPT_POINTS}{" "}
+            points the means of as many equal stretches are kept beside the fit, for drawing and for CSV.
+          </p>
+        </>
       ) : (
-        <EmptyState title="Nothing here yet">
-          Files that take longer to read than a page should wait stand here, with how far they are and how they ended.
+        <EmptyState title={searched ? "No work fits" : "Nothing here yet"}>
+          {searched
+            ? "Change the search, or take a filter away."
+            : "Files that take longer to read than a page should wait stand here, with how far they are and how they ended."}
         </EmptyState>
       )}
     </>

@@ -1,4 +1,5 @@
 import { jobJson } from "#app/lib/job-json.ts";
+import { SCAN_FILE_LIMIT, tooLargeSentence } from "#app/lib/scan-file.ts";
 import { mayInProgram } from "#app/policies/permissions.ts";
 import { scanRequestSchema } from "#app/schemas/scan-request.ts";
 import { actorContext, scopeOf } from "#app/server/contexts.server.ts";
@@ -11,9 +12,6 @@ import { getReading } from "#app/services/scan-readings/get-reading.server.ts";
 import { importScanFiles } from "#app/services/scan-readings/import-files.server.ts";
 import { scanAnswer } from "./scan-answer.server.ts";
 import type { Route } from "./+types/scans";
-
-/** Two million rows of position and height have some 40 MB. */
-const LARGEST = { bytes: 48 * 1024 * 1024, words: "48\u00A0MB" };
 
 const onlyPost = () => problemJson(405, "Send a POST.", { headers: { Allow: "POST" } });
 
@@ -36,9 +34,9 @@ export async function action({ request, context }: Route.ActionArgs) {
 }
 
 async function answer(scope: ActorScope, request: Request): Promise<Response> {
-  const { formData, files, tooLarge } = await readUpload(request, ["file"], LARGEST);
+  const { formData, files, tooLarge } = await readUpload(request, ["file"], SCAN_FILE_LIMIT);
   const { file } = files;
-  if (tooLarge.file) return problemJson(413, `A file may have up to ${LARGEST.words}.`);
+  if (tooLarge.file) return problemJson(413, tooLargeSentence(tooLarge.file.name, tooLarge.file.size));
   const parsed = scanRequestSchema.safeParse(Object.fromEntries(formData));
   const faults = (parsed.error?.issues ?? []).map(({ path, message }) => ({
     pointer: `/${path.join("/")}`,

@@ -19,11 +19,7 @@ export interface NewJob<Kind extends JobKind> {
 }
 
 /** Puts a job into the queue within the caller's transaction: what it is about and the job are there together or not at all. */
-export async function enqueue<Kind extends JobKind>(
-  em: EntityManager,
-  scope: ActorScope,
-  job: NewJob<Kind>,
-): Promise<string> {
+async function enqueue<Kind extends JobKind>(em: EntityManager, scope: ActorScope, job: NewJob<Kind>): Promise<string> {
   const { id } = em.create(Job, {
     ...job,
     id: randomUUID(),
@@ -40,6 +36,21 @@ export async function enqueue<Kind extends JobKind>(
   await em.flush();
   await putIntoQueue(em, id);
   return id;
+}
+
+/** The same, or the job that is at the very same already: two requests for it wait for each other. */
+export async function enqueueOnce<Kind extends JobKind>(
+  em: EntityManager,
+  scope: ActorScope,
+  job: NewJob<Kind>,
+): Promise<string> {
+  const input = JSON.stringify(job.input);
+  await em.execute("select pg_advisory_xact_lock(hashtext(?))", [input]);
+  const [running] = await em.execute<{ id: string }[]>(
+    "select id from job where program_id = ? and kind = ? and state in ('waiting', 'running') and input = ?::jsonb",
+    [job.program, job.kind, input],
+  );
+  return running?.id ?? enqueue(em, scope, job);
 }
 
 /** Has a job that is marked as waiting worked off; a worker hears of it when the transaction ends. */

@@ -1,24 +1,37 @@
 import { LockMode } from "@mikro-orm/core";
 import { Job } from "#app/db/entities/job.ts";
-import type { JobRow } from "#app/schemas/job.ts";
-import { mayInProgram, programsWhere } from "#app/policies/permissions.ts";
+import type { ListParams } from "#app/lib/list-params.ts";
+import { JOB_STATES, type JobRow } from "#app/schemas/job.ts";
+import { mayInProgram } from "#app/policies/permissions.ts";
 import { notFound, problem } from "#app/server/problem.server.ts";
 import { inScope, type ActorScope } from "#app/server/scope.server.ts";
 import { requireInProgram, requireInSomeProgram } from "../permission.server.ts";
+import { escapeLike } from "../like.server.ts";
+import { programFilter } from "../program-filter.server.ts";
 import { idFrom } from "../uuid.server.ts";
 import { putIntoQueue } from "./enqueue.server.ts";
 
 /** What the list shows; older ones have been seen. */
 const MOST_SHOWN = 50;
 
-/** The newest jobs of the programs that the person works in. */
-export async function listJobs(scope: ActorScope): Promise<JobRow[]> {
+export const JOB_SORTS = ["newest"] as const;
+
+/** The newest jobs of the programs that the person works in, searched by file, wafer and person. */
+export async function listJobs(
+  scope: ActorScope,
+  { query, filters }: Pick<ListParams, "query" | "filters">,
+): Promise<JobRow[]> {
   requireInSomeProgram(scope, "see the work");
-  const programs = programsWhere(scope.actor, "see the work").map(({ programId }) => programId);
+  const pattern = { $ilike: `%${escapeLike(query)}%` };
+  const state = JOB_STATES.find((known) => known === filters["state"]);
   return inScope(scope, async (em) => {
     const jobs = await em.find(
       Job,
-      { program: { $in: programs } },
+      {
+        program: programFilter(scope.actor, "see the work", filters["program"]),
+        ...(state ? { state } : {}),
+        ...(query ? { $or: [{ title: pattern }, { createdBy: { name: pattern } }] } : {}),
+      },
       { populate: ["program", "createdBy"], orderBy: [{ createdAt: "desc" }, { id: "asc" }], limit: MOST_SHOWN },
     );
     return jobs.map((job) => rowOf(scope, job));

@@ -1,11 +1,12 @@
 import { randomUUID } from "node:crypto";
 import { z } from "zod";
 import { Job } from "#app/db/entities/job.ts";
-import type { JobInput, JobKind, JobOutcome, JobState } from "#app/schemas/job.ts";
+import type { JobInput, JobKind, JobKinds, JobOutcome, JobState } from "#app/schemas/job.ts";
 import { log } from "#app/server/log.server.ts";
 import { refusedSentence } from "#app/server/problem.server.ts";
 import { inScope, type ActorScope, type Scope } from "#app/server/scope.server.ts";
 import { actorById } from "../actor.server.ts";
+import { readStoredPair } from "../scan-pair-job.server.ts";
 import { readStoredFiles } from "../scan-readings/read-stored-files.server.ts";
 import { JobInterrupted, JobRefused, JobStopped, progressOf, type Tell } from "./progress.server.ts";
 
@@ -17,9 +18,20 @@ export interface Worked {
   sentence: string;
 }
 
-const WORK: Record<JobKind, (scope: ActorScope, input: JobInput, tell: Tell) => Promise<Worked>> = {
+type Work<Kind extends JobKind> = (
+  scope: ActorScope,
+  input: JobKinds[Kind]["input"],
+  tell: Tell,
+  job: string,
+) => Promise<Worked>;
+
+const WORK: { [Kind in JobKind]: Work<Kind> } = {
   "scan files": readStoredFiles,
+  "scan pair": readStoredPair,
 };
+
+/** The input of a job is that of its kind: both were put into the queue together. */
+const workOf = (kind: JobKind) => WORK[kind] as Work<JobKind>;
 
 interface Attempt {
   isLastAttempt: boolean;
@@ -42,7 +54,7 @@ export async function runJob(payload: unknown, { isLastAttempt, signal }: Attemp
     const actor = await actorById(job.personId, work.requestId);
     if (!actor) throw new JobRefused("Whoever asked for this no longer has an account in use.");
     const scope = { actor, requestId: work.requestId };
-    const { outcome, sentence } = await WORK[job.kind](scope, job.input, progressOf(work, id, signal));
+    const { outcome, sentence } = await workOf(job.kind)(scope, job.input, progressOf(work, id, signal), id);
     await note(work, id, { state: "done", sentence, outcome, done: job.total, endedAt: new Date() });
   } catch (error) {
     if (error instanceof JobStopped) return end("stopped", "What had been read by then stays.");

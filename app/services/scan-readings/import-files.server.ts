@@ -1,21 +1,21 @@
 import { UniqueConstraintViolationException, type EntityManager } from "@mikro-orm/postgresql";
 import { ScanFile } from "#app/db/entities/scan-file.ts";
 import { excerpt } from "#app/lib/excerpt.ts";
+import { LARGEST_ON_REQUEST } from "#app/lib/scan-file.ts";
 import { readingFigures } from "#app/lib/reading-figures.ts";
 import type { Fault } from "#app/lib/scan-reading/reading.ts";
+import { questionAtBeginning } from "#app/lib/scan-reading/beginning.ts";
 import { ScanFileError } from "#app/lib/scan-reading/refusal.ts";
 import { readScanFile } from "#app/lib/scan-reading/scan-reader.ts";
+import type { StoredFile } from "#app/schemas/job.ts";
 import type { ReadingSettings, ScanReadingResult } from "#app/schemas/scan-reading.ts";
 import { inScope, type ActorScope } from "#app/server/scope.server.ts";
 import type { UploadedFile } from "#app/server/upload.server.ts";
-import { enqueue } from "../jobs/enqueue.server.ts";
+import { enqueueOnce } from "../jobs/enqueue.server.ts";
 import { requireInProgram } from "../permission.server.ts";
-import { keepScanFile, sha256 } from "../scan-files.server.ts";
+import { fileHash, keepScanFile, keepScanFileAlone } from "../scan-files.server.ts";
 import { keepReading, knownReading } from "./keep-reading.server.ts";
 import { fileRefusal } from "./refusal-sentence.ts";
-
-/** A larger file is read by a job, bytes: this much takes some 50 ms. */
-export const LARGEST_ON_REQUEST = 1024 * 1024;
 
 export type Imported =
   | { outcome: "read" | "already read"; reading: string }
@@ -30,7 +30,7 @@ interface Import {
 
 /**
  * Takes files of an instrument in. One small file is read here and now, and one that cannot be read leaves nothing behind; a large file
- * and a batch are stored, each file in its own transaction, and read by a job. What has been read in the same way before is found.
+ * that begins well and a batch are stored, each file in its own transaction, and read by a job. What has been read in the same way before is found.
  * @throws 403 for a role that may not, 404 for a program that is not the person's own
  */
 export async function importScanFiles(scope: ActorScope, { program, files, settings }: Import): Promise<Imported> {
@@ -38,10 +38,12 @@ export async function importScanFiles(scope: ActorScope, { program, files, setti
   const [only, ...others] = files;
   if (!only) throw new Error("an import has a file");
   if (others.length > 0) return importInJob(scope, { program, files, settings });
+  const isLarge = only.bytes.length > LARGEST_ON_REQUEST;
+  const refused = isLarge ? refusedAtBeginning(only, settings) : null;
+  if (refused) return refused;
   const known = await inScope(scope, (em) => readingOfBytes(em, program, only, settings));
   if (known !== null) return { outcome: "already read", reading: known };
-  if (only.bytes.length > LARGEST_ON_REQUEST) return importInJob(scope, { program, files, settings });
-  return importNow(scope, program, only, settings);
+  return isLarge ? importInJob(scope, { program, files, settings }) : importNow(scope, program, only, settings);
 }
 
 async function readingOfBytes(
@@ -50,8 +52,28 @@ async function readingOfBytes(
   { bytes }: UploadedFile,
   settings: ReadingSettings,
 ): Promise<string | null> {
-  const file = await em.findOne(ScanFile, { program, hash: sha256(bytes) }, { fields: ["id"] });
+  const file = await em.findOne(ScanFile, { program, hash: await fileHash(bytes) }, { fields: ["id"] });
   return file && knownReading(em, file.id, settings);
+}
+
+function refusedAtBeginning(
+  { bytes, name }: UploadedFile,
+  { profile, edgeExclusion }: ReadingSettings,
+): Imported | null {
+  try {
+    const question = questionAtBeginning(bytes, name, profile);
+    if (question) readingFigures(excerpt(name, 80), question, edgeExclusion);
+    return null;
+  } catch (error) {
+    return refusedBy(error);
+  }
+}
+
+/** @throws what is no fault of the file */
+function refusedBy(error: unknown): Imported {
+  const reason = fileRefusal(error);
+  if (reason === null) throw error;
+  return { outcome: "refused", reason, faults: error instanceof ScanFileError ? error.faults : [] };
 }
 
 async function importNow(
@@ -65,9 +87,7 @@ async function importNow(
     const name = excerpt(file.name, 80);
     result = readingFigures(name, readScanFile(file.bytes, file.name, settings.profile), settings.edgeExclusion);
   } catch (error) {
-    const reason = fileRefusal(error);
-    if (reason === null) throw error;
-    return { outcome: "refused", reason, faults: error instanceof ScanFileError ? error.faults : [] };
+    return refusedBy(error);
   }
   try {
     const reading = await inScope(scope, async (em) => {
@@ -84,44 +104,26 @@ async function importNow(
 }
 
 async function importInJob(scope: ActorScope, { program, files, settings }: Import): Promise<Imported> {
-  const kept = new Map<string, { id: string; name: string; size: number }>();
+  const kept = new Map<string, StoredFile>();
   for (const file of files) {
-    const { id, name, size } = await keepAlone(scope, program, file);
-    kept.set(id, { id, name, size });
+    const stored = await keepScanFileAlone(scope, program, file);
+    kept.set(stored.id, stored);
   }
   const list = [...kept.values()];
-  return inScope(scope, async (em): Promise<Imported> => {
-    const input = { files: list, settings };
-    // Two requests for the same wait for each other here.
-    await em.execute("select pg_advisory_xact_lock(hashtext(?))", [JSON.stringify(input)]);
-    const [running] = await em.execute<{ id: string }[]>(
-      "select id from job where program_id = ? and kind = 'scan files' and state in ('waiting', 'running') and input = ?::jsonb",
-      [program, JSON.stringify(input)],
-    );
-    if (running) return { outcome: "job", job: running.id };
-    const job = await enqueue(em, scope, {
+  const job = await inScope(scope, (em) =>
+    enqueueOnce(em, scope, {
       program,
       kind: "scan files",
       title: titleOf(list.map(({ name }) => name)),
       total: list.reduce((sum, { size }) => sum + size, 0),
       unit: "bytes",
-      input,
-    });
-    return { outcome: "job", job };
-  });
+      input: { files: list, settings },
+    }),
+  );
+  return { outcome: "job", job };
 }
 
 function titleOf([first = "", ...others]: string[]): string {
   const name = excerpt(first, 80);
   return others.length === 0 ? name : `${name} and ${others.length} more`;
-}
-
-async function keepAlone(scope: ActorScope, program: string, file: UploadedFile): Promise<ScanFile> {
-  const keep = () => inScope(scope, (em) => keepScanFile(em, scope, program, file));
-  try {
-    return await keep();
-  } catch (error) {
-    if (error instanceof UniqueConstraintViolationException) return keep();
-    throw error;
-  }
 }

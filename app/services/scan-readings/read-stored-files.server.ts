@@ -2,7 +2,6 @@ import { UniqueConstraintViolationException } from "@mikro-orm/postgresql";
 import { ScanFile } from "#app/db/entities/scan-file.ts";
 import { count } from "#app/lib/count-words.ts";
 import { readingFigures } from "#app/lib/reading-figures.ts";
-import { scanReader } from "#app/lib/scan-reading/scan-reader.ts";
 import type { FileOutcome, JobKinds } from "#app/schemas/job.ts";
 import type { ReadingSettings, ScanReadingResult } from "#app/schemas/scan-reading.ts";
 import { notFound } from "#app/server/problem.server.ts";
@@ -10,12 +9,9 @@ import { inScope, type ActorScope } from "#app/server/scope.server.ts";
 import { JobRefused, type Tell } from "../jobs/progress.server.ts";
 import type { Worked } from "../jobs/run-job.server.ts";
 import { requireInProgram } from "../permission.server.ts";
-import { scanFilePiece } from "../scan-files.server.ts";
 import { keepReading, knownReading } from "./keep-reading.server.ts";
+import { readInPieces } from "./read-in-pieces.server.ts";
 import { fileRefusal } from "./refusal-sentence.ts";
-
-/** Bytes between two looks at whether to go on. */
-const PIECE = 1024 * 1024;
 
 /**
  * Reads and fits files that are stored, each in a transaction of its own. A file that cannot be read stays as it is, with its reason;
@@ -69,7 +65,8 @@ async function readStored(
   if (known !== null) return { outcome: "already read", reading: known };
   let result: ScanReadingResult;
   try {
-    result = await readInPieces(scope, { id, ...stored }, settings, tell);
+    const read = await readInPieces(scope, { id, ...stored }, settings.profile, tell);
+    result = readingFigures(stored.name, read, settings.edgeExclusion);
   } catch (error) {
     const reason = fileRefusal(error);
     if (reason === null) throw error;
@@ -87,19 +84,4 @@ async function readStored(
     if (reading === null) throw error;
     return { outcome: "already read", reading };
   }
-}
-
-/** The text of a large file never exists all together: its bytes come from the database piece by piece. */
-async function readInPieces(
-  scope: ActorScope,
-  { id, name, size }: { id: string; name: string; size: number },
-  { profile, edgeExclusion }: ReadingSettings,
-  tell: Tell,
-): Promise<ScanReadingResult> {
-  const reader = scanReader(name, profile);
-  for (let at = 0; at < size; at += PIECE) {
-    if (!reader.push(await scanFilePiece(scope, id, at, PIECE))) break;
-    await tell(Math.min(at + PIECE, size));
-  }
-  return readingFigures(name, reader.end(), edgeExclusion);
 }

@@ -61,6 +61,7 @@ describe("the same scan, written in different ways", () => {
     ["line ends of another system", { lineEnd: "\r\n" }, { firstRow: 2 }],
     ["line ends of an old system", { lineEnd: "\r" }, { firstRow: 2 }],
     ["all cells in quotes", { quoted: true, lines: ['"x (mm)","z (µm)"'] }, { delimiter: "," }],
+    ["one head of two in quotes", { lines: ['"x (mm)",z (µm)'] }, { delimiter: "," }],
     [
       "decimal commas in quotes between commas",
       { quoted: true, decimalComma: true, lines: ['"x (mm)","z (µm)"'] },

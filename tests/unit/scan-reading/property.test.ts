@@ -113,7 +113,7 @@ describe("numbers", () => {
     (text) => expect(numberReader("point", "none")(text)).toBeNaN(),
   );
 
-  it.each(["1.5", "1,", "1.234,5", ","])("'%s' is none with a decimal comma", (text) =>
+  it.each(["1.5", "1,", "1, ", "1,e5", "1.234,5", ","])("'%s' is none with a decimal comma", (text) =>
     expect(numberReader("comma", "none")(text)).toBeNaN(),
   );
 
@@ -131,7 +131,7 @@ describe("numbers", () => {
   });
 });
 
-describe("more points than a fit is given", () => {
+describe("more points than are kept", () => {
   const arrays = (points: { x: number; z: number }[]) => ({
     x: Float64Array.from(points, ({ x }) => x),
     z: Float64Array.from(points, ({ z }) => z),
@@ -141,7 +141,7 @@ describe("more points than a fit is given", () => {
   // Sines of numbers that share no period with the scan stand for noise of 50 nm.
   const scan = trueScan({ count: 60_000 }).map(({ x, z }, n) => ({ x, z: z + 70e-9 * Math.sin(12.9898 * n * n) }));
 
-  it("become means that give the same curvature within its uncertainty, in any order", () => {
+  it("become means that show the curvature that all of them have, in any order", () => {
     const all = fitProfile(scan, { edgeExclusion: 5e-3 });
     for (const points of [scan, [...scan].reverse()]) {
       const means = profilePoints(arrays(points), 5000);

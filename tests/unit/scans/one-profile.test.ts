@@ -39,12 +39,12 @@ describe("a file of one profile, units and decimal mark stated", () => {
     ["a row of units", styled({ head: ["x,z", "mm,µm"] }), POINT, ","],
   ])("%s", (_, text, format, delimiter) => {
     const { points, reading } = read(text, format);
-    expect(points).toHaveLength(381);
+    expect(points.x).toHaveLength(381);
     expect(reading).toMatchObject({ rows: 381, used: 381, skippedInAll: 0, delimiter, readColumns: [0, 1] });
     expect(reading.from).toBeCloseTo(-0.095, 12);
     expect(reading.to).toBeCloseTo(0.095, 12);
     // Written with four decimals of a micrometre.
-    points.forEach(({ z }, n) => expect(Math.abs(z - (POINTS[n]?.z ?? 0))).toBeLessThan(0.51e-10));
+    points.z.forEach((z, n) => expect(Math.abs(z - (POINTS[n]?.z ?? 0))).toBeLessThan(0.51e-10));
   });
 
   it("other units, Å and inch too", () => {
@@ -53,18 +53,18 @@ describe("a file of one profile, units and decimal mark stated", () => {
       styled({ head: ["x (in),z (A)"], positionPerMetre: 1e4 / 254, heightPerMetre: 1e10 }),
       format,
     );
-    expect(points[0]?.x).toBeCloseTo(-0.095, 4);
-    expect(points[0]?.z).toBeCloseTo(POINTS[0]?.z ?? 0, 12);
+    expect(points.x[0]).toBeCloseTo(-0.095, 4);
+    expect(points.z[0]).toBeCloseTo(POINTS[0]?.z ?? 0, 12);
   });
 
   it("the trade's minus sign, powers of ten and plus signs", () => {
     const { points } = read(rows(8, (n) => `\u2212${n}.5e0,+${n}E-1`));
-    expect(points[2]).toEqual({ x: -0.0025, z: 0.2 / 1e6 });
+    expect([points.x[2], points.z[2]]).toEqual([-0.0025, 0.2 / 1e6]);
   });
 
   it("columns by their heads, wherever they stand", () => {
     const { points, reading } = read(`Height (µm),No,Position (mm)\n${rows(9, (n) => `${n}.25,${n + 1},${n}.5`)}`);
-    expect(points[3]).toEqual({ x: 0.0035, z: 3.25e-6 });
+    expect([points.x[3], points.z[3]]).toEqual([0.0035, 3.25e-6]);
     expect(reading).toMatchObject({ columns: 3, readColumns: [2, 0], heading: "Position (mm), Height (µm)" });
   });
 
@@ -73,17 +73,19 @@ describe("a file of one profile, units and decimal mark stated", () => {
     expect(reading).toMatchObject({ columns: 4, readColumns: [0, 1], heading: null });
   });
 
-  it("more points than a fit needs become means, and that is said", () => {
+  it("all points of a long scan, each as it stands there", () => {
     const { points, reading } = read(rows(25_000, (n) => `${(n / 200).toFixed(4)},${(n % 7) + 0.25}`));
-    expect(points).toHaveLength(10_000);
-    expect(reading).toMatchObject({ rows: 25_000, used: 25_000, averagedTo: 10_000 });
+    expect([points.x.length, points.z.length]).toEqual([25_000, 25_000]);
+    expect([points.x[24_999], points.z[24_999]]).toEqual([124.995 / 1e3, 2.25e-6]);
+    expect(reading).toMatchObject({ rows: 25_000, used: 25_000 });
+    expect(reading.averagedTo).toBeUndefined();
   });
 });
 
 describe("rows that are no pair of numbers", () => {
   it("are left out and named by row, column and what stands there", () => {
     const { points, reading } = read(`x,z\n${rows(10)}\n4.5,NaN\n,7.1\n# end of scan\nchecked,yes\n11.5,3.2\n`);
-    expect(points).toHaveLength(11);
+    expect(points.x).toHaveLength(11);
     expect(reading.rows).toBe(14);
     expect(reading.skippedInAll).toBe(3);
     expect(reading.skipped).toEqual([
@@ -159,12 +161,13 @@ describe("the decimal mark", () => {
   });
 
   it("four columns of whole numbers with four heads are read", () => {
-    expect(read(`x,z,force,flag\n${rows(9, (n) => `${n},${n},3,0`)}`).points).toHaveLength(9);
+    expect(read(`x,z,force,flag\n${rows(9, (n) => `${n},${n},3,0`)}`).points.x).toHaveLength(9);
   });
 
   it("thousands are not taken for decimals, nor the other way round, unasked", () => {
     const text = `x;z\n${rows(9, (n) => `${n + 1},250;${n + 2},125`)}`;
-    expect(read(text, COMMA).points[0]).toEqual({ x: 0.00125, z: 2.125e-6 });
+    const { x, z } = read(text, COMMA).points;
+    expect([x[0], z[0]]).toEqual([0.00125, 2.125e-6]);
     expect(refusal(text)).toMatch(
       /row 2 holds “1,250”: it may be 1\.250 or 1250.*A decimal point is chosen; choose comma/,
     );

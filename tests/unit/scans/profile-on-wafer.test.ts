@@ -6,7 +6,10 @@ const WAFER = { diameter: 0.2, edgeExclusion: 5e-3 };
 
 /** A level scan from one position to another, m, with one height that differs. */
 function profile(from: number, to: number, height = 1e-6): ReadProfile {
-  const points = Array.from({ length: 21 }, (_, n) => ({ x: from + ((to - from) * n) / 20, z: n === 3 ? height : 0 }));
+  const points = {
+    x: Float64Array.from({ length: 21 }, (_, n) => from + ((to - from) * n) / 20),
+    z: Float64Array.from({ length: 21 }, (_, n) => (n === 3 ? height : 0)),
+  };
   const reading = { rows: 21, used: 21, columns: 2, heading: null, delimiter: ",", skipped: [], skippedInAll: 0 };
   return { points, reading: { ...reading, from, to } };
 }

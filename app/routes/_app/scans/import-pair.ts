@@ -1,4 +1,4 @@
-import { LARGEST_FILE, LARGEST_FILE_WORDS, tooLargeSentence } from "#app/lib/scan-file.ts";
+import { SCAN_FILE_LIMIT, tooLargeSentence } from "#app/lib/scan-file.ts";
 import { scanImportSchema, type PairAnswer } from "#app/schemas/scan-import.ts";
 import { scopeOf } from "#app/server/contexts.server.ts";
 import { parseForm } from "#app/server/parse-form.server.ts";
@@ -23,10 +23,7 @@ const answer = (said: PairAnswer) => Response.json(said, { status: said.outcome 
 export async function action({ request, context }: Route.ActionArgs) {
   const scope = scopeOf(context);
   scanPrograms(scope, "upload scans");
-  const { files, tooLarge, formData } = await readUpload(request, WHICH, {
-    bytes: LARGEST_FILE,
-    words: LARGEST_FILE_WORDS,
-  });
+  const { files, tooLarge, formData } = await readUpload(request, WHICH, SCAN_FILE_LIMIT);
   for (const which of WHICH) {
     const large = tooLarge[which];
     if (large) return answer({ outcome: "refused", which, reason: tooLargeSentence(large.name, large.size) });

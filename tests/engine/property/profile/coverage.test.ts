@@ -19,10 +19,19 @@ interface Kind {
   points: number;
   memory?: number;
   spikes?: number;
+  /** share of the scan at its end that is lifted */
+  step?: number;
+  /** every point at a place of its own, up to half a spacing off */
+  uneven?: boolean;
+  descending?: boolean;
   robust?: boolean;
 }
 
-function noisyScan({ points, memory = 0, spikes = 0 }: Kind, seed: number, stream: number) {
+function noisyScan(
+  { points, memory = 0, spikes = 0, step = 0, uneven, descending }: Kind,
+  seed: number,
+  stream: number,
+) {
   const normal = new Float64Array(points);
   fillNormals(seededState(seed, stream), normal, points, new Int32Array(wordsForNormals(points)));
   const keep = memory > 0 ? Math.exp(-1 / (memory * points)) : 0;
@@ -31,7 +40,9 @@ function noisyScan({ points, memory = 0, spikes = 0 }: Kind, seed: number, strea
   const z = new Float64Array(points);
   for (let n = 0; n < points; n += 1) {
     if (n > 0) noise = keep * noise + Math.sqrt(1 - keep * keep) * (normal[n] ?? 0);
-    const at = -LENGTH / 2 + (LENGTH * n) / (points - 1);
+    const place = uneven ? Math.min(Math.max(n + Math.sin(12.9898 * n * n) / 2, 0), points - 1) : n;
+    const share = uneven ? (place / (points - 1)) ** 1.3 : place / (points - 1);
+    const at = -LENGTH / 2 + LENGTH * share;
     x[n] = at;
     z[n] = 1e-5 + 3e-4 * at + (CURVATURE * at * at) / 2 + SCATTER * noise;
   }
@@ -39,7 +50,8 @@ function noisyScan({ points, memory = 0, spikes = 0 }: Kind, seed: number, strea
     const hit = (k * 7919 + stream * 31) % points;
     z[hit] = (z[hit] ?? 0) + 2e-6;
   }
-  return { x, z };
+  for (let n = Math.ceil(points * (1 - step)); n < points; n += 1) z[n] = (z[n] ?? 0) + 1e-6;
+  return descending ? { x: x.toReversed(), z: z.toReversed() } : { x, z };
 }
 
 function shareHeld(kind: Kind, seed: number): { stated: number; asIndependent: number } {
@@ -58,6 +70,19 @@ describe("expanded uncertainty of a curvature, 1,000 seeded scans each", () => {
     ["independent scatter", { points: 801 }, 1],
     ["few points", { points: 15 }, 2],
     ["a tenth of the points spiked, robust", { points: 801, spikes: 80, robust: true }, 3],
+    ["a step of 1 µm over the last fifth, robust", { points: 801, step: 0.2, robust: true }, 6],
+    [
+      "spikes and a step, descending, robust",
+      { points: 801, spikes: 40, step: 0.1, descending: true, robust: true },
+      7,
+    ],
+    ["unequal spacing", { points: 801, uneven: true }, 8],
+    [
+      "unequal spacing, descending, spiked, robust",
+      { points: 401, uneven: true, descending: true, spikes: 20, robust: true },
+      9,
+    ],
+    ["the independent ones again, robust", { points: 801, robust: true }, 1],
   ])(
     "holds the true curvature in 95 ± 2 %%: %s",
     (_, kind, seed) => {
