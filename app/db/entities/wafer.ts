@@ -17,7 +17,7 @@ export const Wafer = defineEntity({
     id: p.uuid().primary(),
     program: () => p.manyToOne(Program),
     lot: () => p.manyToOne(Lot).nullable().deleteRule("restrict").index(),
-    /** place in the cassette, from 1; null where nobody has said */
+    /** place in the cassette, as the tool counts; null where nobody has said */
     slot: p.integer().nullable(),
     name: p.text(),
     createdAt: p.datetime(),
