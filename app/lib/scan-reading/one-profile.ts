@@ -1,6 +1,7 @@
 import type { ProfilePoint } from "#app/engine/profile/points.ts";
 import { excerpt } from "#app/lib/excerpt.ts";
 import type { ImportProfile } from "#app/schemas/import-profile.ts";
+import type { ScanReadingResult } from "#app/schemas/scan-reading.ts";
 import type { FileFormat, FileReading, SkippedRow } from "#app/schemas/scan-result.ts";
 import { profilePoints } from "./profile-points.ts";
 import type { FileProfile, ProfileFile } from "./profile-rows.ts";
@@ -36,14 +37,6 @@ export function readOneProfile(bytes: Uint8Array, fileName: string, stated: File
   return onlyProfile(read, name);
 }
 
-/**
- * Reads a file that holds one profile as an import profile says; what the profile leaves out is told by the file.
- * @throws ScanFileError with a sentence that says what is wrong, or still open, where, and what to do
- */
-export function readProfileBy(bytes: Uint8Array, fileName: string, profile: ImportProfile): ReadProfile {
-  return onlyProfile(readScanFile(bytes, fileName, profile), excerpt(fileName, LONGEST_HEAD));
-}
-
 function onlyProfile(read: ScanRead, name: string): ReadProfile {
   const { kind, ambiguities } = read.reading;
   if (kind !== "profiles")
@@ -58,7 +51,27 @@ function onlyProfile(read: ScanRead, name: string): ReadProfile {
       `${name} holds ${read.content.profiles.length} profiles: ${read.content.profiles.map((each) => `“${excerpt(each.name, 30)}”`).join(", ")}. Export the one that is meant to a file of its own.`,
     );
   const points = profilePoints(only);
-  return { points, reading: fileReading(read.reading, read.content, only, points.length) };
+  const { position, height, from, to } = only;
+  const profile = { position, height, from, to, used: only.x.length, fitted: points.length };
+  return { points, reading: fileReading(read.reading, read.content, profile) };
+}
+
+/**
+ * One of the profiles that a stored reading holds, as the file was read then. Where points were averaged, the ends are those of the
+ * averages.
+ * @returns null when the reading has no such profile
+ */
+export function storedProfile({ reading, content }: ScanReadingResult, which: number): ReadProfile | null {
+  const profile = content.kind === "profiles" ? content.profiles[which] : undefined;
+  if (content.kind !== "profiles" || !profile) return null;
+  const { position, height, x, z } = profile;
+  const points = x.map((at, n) => ({ x: at, z: z[n] ?? 0 }));
+  const [from, to] = x.reduce<[number, number]>(
+    ([low, high], at) => [Math.min(low, at), Math.max(high, at)],
+    [Infinity, -Infinity],
+  );
+  const about = { position, height, from, to, used: profile.points, fitted: x.length };
+  return { points, reading: fileReading(reading, content, about) };
 }
 
 /** Nothing but the columns is open, and no head says anything of them. */
@@ -71,8 +84,17 @@ function isOnlyUnheaded({ outcome, reading }: ScanRead): boolean {
   );
 }
 
-function fileReading(reading: Reading, content: ProfileFile, profile: FileProfile, points: number): FileReading {
-  const { position, height, x, from, to } = profile;
+/** A profile of a file: its columns, its ends in m, its points in the file and those that a fit is given. */
+interface About extends Pick<FileProfile, "position" | "height" | "from" | "to"> {
+  used: number;
+  fitted: number;
+}
+
+function fileReading(
+  reading: Reading,
+  content: Pick<ProfileFile, "rows" | "faulty" | "faults">,
+  { position, height, from, to, used, fitted }: About,
+): FileReading {
   const unitAt = (column: number) => LENGTH_UNITS.find((unit) => unit === reading.columns[column]?.unit) ?? "m";
   const heads = [position, height].map((column) => reading.columns[column]?.heading ?? "");
   const skipped = content.faults
@@ -81,7 +103,7 @@ function fileReading(reading: Reading, content: ProfileFile, profile: FileProfil
     .sort((one, other) => one.row - other.row);
   return {
     rows: content.rows,
-    used: x.length,
+    used,
     columns: reading.columns.length,
     readColumns: [position, height],
     heading: heads.every((head) => head === "") ? null : excerpt(heads.join(", "), LONGEST_HEAD),
@@ -90,7 +112,7 @@ function fileReading(reading: Reading, content: ProfileFile, profile: FileProfil
     to,
     skipped,
     skippedInAll: content.faulty,
-    ...(points < x.length ? { averagedTo: points } : {}),
+    ...(fitted < used ? { averagedTo: fitted } : {}),
     // A file without any mark reads the same under either.
     format: {
       positionUnit: unitAt(position),
