@@ -39,6 +39,12 @@ export interface ScanFileView {
   hash: string;
 }
 
+/** Whether the person may undo the import of a scan; `use` says by what it is used, which forbids it. */
+export interface ScanUndo {
+  may: boolean;
+  use: string | null;
+}
+
 /** One scan, as its page shows it. */
 export interface ScanDetail {
   id: string;
@@ -46,6 +52,10 @@ export interface ScanDetail {
   program: { id: string; name: string; slug: string };
   film: ScanFilm | null;
   files: Record<"before" | "after", ScanFileView>;
+  /** null for a pair that was uploaded without a wafer of its own */
+  placed: { wafer: { id: string; label: string }; azimuth: number | null; instrument: string } | null;
+  /** what an undo would meet */
+  undo: ScanUndo;
   parameters: ScanParameters;
   result: ScanResult;
   working: ShownWorking;

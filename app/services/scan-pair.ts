@@ -1,6 +1,7 @@
-import { EngineInputError } from "#app/engine/errors.ts";
-import { excerpt } from "#app/lib/excerpt.ts";
 import { checkTogether } from "#app/lib/profile-on-wafer.ts";
+import { excerpt } from "#app/lib/excerpt.ts";
+import { EngineInputError } from "#app/engine/errors.ts";
+import { runBackwards } from "#app/lib/run-backwards.ts";
 import type { ReadProfile } from "#app/lib/scan-reading/one-profile.ts";
 import { ScanFileError } from "#app/lib/scan-reading/refusal.ts";
 import type { FileFormat, ScanResult } from "#app/schemas/scan-result.ts";
@@ -17,16 +18,23 @@ export interface PairedProfile {
 }
 
 /**
- * What two profiles of one line, each held against the wafer already, say of the film between them.
+ * What two profiles of one line, each held against the wafer already, say of the film between them. `opposed` says that the second
+ * was run the other way.
  * @throws ScanFileError when they cannot be of one line, EngineInputError when they give no curvature
  */
-export function pairResult(values: ScanSubject, before: PairedProfile, after: PairedProfile): ScanResult {
+export function pairResult(
+  values: ScanSubject,
+  before: PairedProfile,
+  after: PairedProfile,
+  { opposed = false } = {},
+): ScanResult {
   if (before.hash === after.hash)
     throw new ScanFileError(
       `${excerpt(after.name, 80)} holds the same bytes as the file before the film. Choose the scan after it.`,
     );
-  checkTogether(before, after, values);
-  return scanResult(values, before.profile, after.profile);
+  const turned = opposed ? runBackwards(after.profile) : after.profile;
+  checkTogether(before, { name: after.name, profile: turned }, values);
+  return scanResult(values, before.profile, { points: turned.points, reading: after.profile.reading });
 }
 
 /** Why two profiles make no scan, for a person; null when the fault is not theirs. */

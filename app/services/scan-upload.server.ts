@@ -6,7 +6,7 @@ import { Scan } from "#app/db/entities/scan.ts";
 import { ENGINE_VERSION } from "#app/engine/version.ts";
 import { excerpt } from "#app/lib/excerpt.ts";
 import { checkOnWafer } from "#app/lib/profile-on-wafer.ts";
-import { readOneProfile, type ReadProfile } from "#app/lib/scan-reading/one-profile.ts";
+import { readOneProfile } from "#app/lib/scan-reading/one-profile.ts";
 import { ScanFileError } from "#app/lib/scan-reading/refusal.ts";
 import type { ScanResult } from "#app/schemas/scan-result.ts";
 import type { ScanSubject, ScanValues } from "#app/schemas/scan.ts";
@@ -24,26 +24,13 @@ export interface ScanFiles {
   after: UploadedFile;
 }
 
-/** How each file is read. */
-type ReadAs = (which: "before" | "after", file: UploadedFile) => ReadProfile;
-
 /**
  * Reads two profiles, computes the film's stress and stores raw files, inputs and result in one transaction. A pair that cannot be
  * read or computed leaves nothing behind and comes back with the reason.
  */
 export async function uploadScan(scope: ActorScope, values: ScanValues, files: ScanFiles): Promise<Uploaded> {
-  return uploadReadAs(scope, values, files, (_, file) => readOneProfile(file.bytes, file.name, values));
-}
-
-/** The same where each file says by itself, or by a profile of its own, how it is written. */
-export async function uploadReadAs(
-  scope: ActorScope,
-  values: ScanSubject,
-  files: ScanFiles,
-  readAs: ReadAs,
-): Promise<Uploaded> {
   requireInProgram(scope, "upload scans", values.program, "program");
-  const computed = await computeScan(values, files, readAs);
+  const computed = await computeScan(values, files);
   if ("outcome" in computed) return computed;
   try {
     return await keepScan(scope, values, files, computed.result);
@@ -55,15 +42,14 @@ export async function uploadReadAs(
 }
 
 async function computeScan(
-  values: ScanSubject,
+  values: ScanValues,
   files: ScanFiles,
-  readAs: ReadAs,
 ): Promise<{ result: ScanResult } | Refused> {
   let reading: "before" | "after" = "before";
   const read = async (which: "before" | "after"): Promise<PairedProfile> => {
     reading = which;
     const { name, bytes } = files[which];
-    const profile = readAs(which, files[which]);
+    const profile = readOneProfile(bytes, name, values);
     checkOnWafer(profile, excerpt(name, 80), values);
     return { name, hash: await fileHash(bytes), profile };
   };

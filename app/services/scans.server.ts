@@ -3,8 +3,9 @@ import { Scan } from "#app/db/entities/scan.ts";
 import { ScanFile } from "#app/db/entities/scan-file.ts";
 import { stoneyStressWorking } from "#app/engine/stoney/working.ts";
 import { shownWorking } from "#app/lib/shown-working.ts";
+import { waferLabel } from "#app/lib/wafer-label.ts";
 import { PAGE_SIZE, type ListPage, type ListParams } from "#app/lib/list-params.ts";
-import { programsWhere, type ProgramPermission } from "#app/policies/permissions.ts";
+import { mayInProgram, programsWhere, type ProgramPermission } from "#app/policies/permissions.ts";
 import type { Actor } from "#app/policies/roles.ts";
 import type { ScanDetail, ScanRow } from "#app/schemas/scan-view.ts";
 import { notFound, problem } from "#app/server/problem.server.ts";
@@ -13,6 +14,8 @@ import { escapeLike } from "./like.server.ts";
 import { requireInProgram } from "./permission.server.ts";
 import { programFilter } from "./program-filter.server.ts";
 import { idFrom } from "./uuid.server.ts";
+import { useOfScan } from "./wafers/undo-import.server.ts";
+import { labelled } from "./wafers/wafer-of.ts";
 
 /** The programs in which the person may do this with scans; somebody who may nowhere is refused. */
 export function scanPrograms({ actor }: ActorScope, permission: ProgramPermission): Actor["memberships"] {
@@ -101,7 +104,7 @@ export async function getScan(scope: ActorScope, id: string | undefined): Promis
     const scan = await em.findOne(
       Scan,
       { id: idFrom(id, "scan") },
-      { populate: ["program", "film", "before", "after", "createdBy", "result"] },
+      { populate: ["program", "film", "before", "after", "wafer.lot", "createdBy", "result"] },
     );
     if (!scan) throw notFound("scan");
     requireInProgram(scope, "see the work", scan.program.id, "scan");
@@ -127,6 +130,11 @@ export async function getScan(scope: ActorScope, id: string | undefined): Promis
           }
         : null,
       files: { before: file(scan.before), after: file(scan.after) },
+      placed: placeOf(scan),
+      undo: {
+        may: mayInProgram(scope.actor, "upload scans", program.id),
+        use: await useOfScan(em, scan.id),
+      },
       parameters,
       result,
       working: shownWorking(
@@ -142,6 +150,15 @@ export async function getScan(scope: ActorScope, id: string | undefined): Promis
       createdBy: scan.createdBy.name,
     };
   });
+}
+
+function placeOf({ wafer, azimuth, instrumentName }: Scan): ScanDetail["placed"] {
+  if (!wafer) return null;
+  return {
+    wafer: { id: wafer.id, label: waferLabel(labelled(wafer)) },
+    azimuth: azimuth ?? null,
+    instrument: instrumentName,
+  };
 }
 
 /** The raw bytes of a file, exactly as they came. */

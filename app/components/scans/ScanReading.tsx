@@ -2,7 +2,7 @@ import { fileSize } from "#app/lib/file-size.ts";
 import { formatQuantity } from "#app/engine/units/format.ts";
 import type { FileReading, ScanParameters } from "#app/schemas/scan-result.ts";
 import type { ScanFileView } from "#app/schemas/scan-view.ts";
-import { DELIMITER_WORDS } from "./delimiter-words.ts";
+import { DELIMITER_WORDS } from "#app/lib/scan-reading/delimiter-words.ts";
 
 interface Props {
   which: "before" | "after";

@@ -49,7 +49,7 @@ export function ScanView({ scan }: { scan: ScanDetail }) {
           )}
         </div>
         <div className="min-w-0 space-y-6 border-ink p-4 max-wide:border-t tablet:p-6 wide:border-l">
-          <ScanInputs parameters={parameters} />
+          <ScanInputs parameters={parameters} placed={scan.placed} />
           <ScanReading
             which="before"
             file={files.before}

@@ -8,7 +8,6 @@ const ORIENTATIONS: Choice[] = [
 ];
 
 type Field =
-  | "program"
   | "film"
   | "filmThickness"
   | "filmThicknessTolerance"
@@ -23,13 +22,28 @@ export function SubjectFields({
   programs,
   films,
 }: {
-  fields: Record<Field, FieldMetadata<string>>;
+  fields: Record<Field | "program", FieldMetadata<string>>;
   programs: readonly Choice[];
   films: readonly Choice[];
 }) {
   return (
     <>
       <ChoiceField field={fields.program} label="Program" choices={programs} blank="Choose" />
+      <MeasuredWaferFields fields={fields} films={films} />
+    </>
+  );
+}
+
+/** The same where the program is settled. */
+export function MeasuredWaferFields({
+  fields,
+  films,
+}: {
+  fields: Record<Field, FieldMetadata<string>>;
+  films: readonly Choice[];
+}) {
+  return (
+    <>
       <ChoiceField
         field={fields.film}
         label="Film, to compare with the library"

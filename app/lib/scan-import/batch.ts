@@ -14,6 +14,10 @@ export interface BatchFile {
   /** counts the profiles that it was read by */
   revision: number;
   of: ScanOf;
+  /** of each profile of a file that holds several, where a person has typed it, by its place */
+  azimuths: Readonly<Record<number, string>>;
+  /** id of the import profile of its instrument, where one was chosen or kept */
+  instrument: string | null;
   /** bytes that are read; null when it is not being read */
   done: number | null;
   told: Told | null;
@@ -23,7 +27,9 @@ export type BatchChange =
   | { kind: "add"; files: readonly File[] }
   | { kind: "remove"; keys: readonly string[] }
   | { kind: "profile"; key: string; profile: ImportProfile }
-  | { kind: "profile of all"; from: string; profile: ImportProfile }
+  | { kind: "profile of all"; from: string }
+  | { kind: "instrument"; key: string; instrument: string | null; profile?: ImportProfile }
+  | { kind: "azimuth"; key: string; profile: number; azimuth: string }
   | { kind: "of"; key: string; of: Partial<ScanOf> }
   | { kind: "said"; said: FileSaid };
 
@@ -48,7 +54,13 @@ export function changedBatch(batch: Batch, change: BatchChange): Batch {
     case "profile":
       return each((file) => (file.key === change.key ? readAnew(file, change.profile) : file));
     case "profile of all":
-      return each((file) => (file.key === change.from ? file : readAnew(file, { ...file.profile, ...change.profile })));
+      return profileOfAll(batch, change.from);
+    case "instrument":
+      return each((file) => (file.key === change.key ? withInstrument(file, change) : file));
+    case "azimuth":
+      return each((file) =>
+        file.key === change.key ? { ...file, azimuths: { ...file.azimuths, [change.profile]: change.azimuth } } : file,
+      );
     case "of":
       return each((file) => (file.key === change.key ? { ...file, of: { ...file.of, ...change.of } } : file));
     case "said":
@@ -71,6 +83,8 @@ function added(batch: Batch, chosen: readonly File[]): Batch {
         profile: {},
         revision: 1,
         of: guessFromName(file.name),
+        azimuths: {},
+        instrument: null,
         done: tooLarge ? null : 0,
         told: tooLarge ? unreadable(tooLargeSentence(file.name, file.size)) : null,
       });
@@ -86,6 +100,29 @@ const isSame = (one: File, other: File) =>
 function readAnew(file: BatchFile, profile: ImportProfile): BatchFile {
   if (file.file.size > LARGEST_FILE) return file;
   return { ...file, profile, revision: file.revision + 1, done: 0 };
+}
+
+/** What was answered to one file, and its instrument, for all the others too; what they have of their own stays. */
+function profileOfAll(batch: Batch, from: string): Batch {
+  const source = batch.files.find(({ key }) => key === from);
+  if (!source) return batch;
+  const files = batch.files.map((file) =>
+    file.key === from
+      ? file
+      : {
+          ...readAnew(file, { ...file.profile, ...source.profile }),
+          instrument: source.instrument ?? file.instrument,
+        },
+  );
+  return { ...batch, files };
+}
+
+/** The instrument of a file; its profile is read by at once where one comes with it. */
+function withInstrument(
+  file: BatchFile,
+  { instrument, profile }: Extract<BatchChange, { kind: "instrument" }>,
+): BatchFile {
+  return { ...(profile ? readAnew(file, profile) : file), instrument };
 }
 
 /** A refusal leaves the form that was told before, so that what was chosen can be chosen otherwise. */

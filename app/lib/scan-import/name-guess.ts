@@ -49,3 +49,10 @@ export function guessFromName(fileName: string): ScanOf {
     side: side === null ? "" : side[1] === undefined ? "after" : "before",
   };
 }
+
+/** An angle in the head of a column, 'z 45° (µm)' or 'Height az 90', in degrees; nothing when it names none. */
+export function azimuthOfHead(head: string): string {
+  const found = /\baz(?:imuth)?[ _=:]*(\d{1,3})\b|(\d{1,3}) ?(?:deg\b|°)/i.exec(head);
+  const degrees = Number(found?.[1] ?? found?.[2] ?? NaN);
+  return degrees <= 360 ? String(degrees) : "";
+}

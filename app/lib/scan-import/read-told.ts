@@ -2,6 +2,7 @@ import { profilePoints } from "#app/lib/scan-reading/profile-points.ts";
 import { ScanFileError } from "#app/lib/scan-reading/refusal.ts";
 import { scanReader, type FileContent } from "#app/lib/scan-reading/scan-reader.ts";
 import type { ImportProfile } from "#app/schemas/import-profile.ts";
+import { azimuthOfHead } from "./name-guess.ts";
 import { UNTOLD, type Told } from "./told.ts";
 
 /** Points that a small plot can show. */
@@ -45,6 +46,7 @@ function shown(content: FileContent): Pick<Told, "profiles" | "rows" | "faults" 
   return {
     profiles: content.profiles.map((profile) => ({
       name: profile.name,
+      azimuth: azimuthOfHead(profile.name),
       points: profile.x.length,
       trace: profilePoints(profile, DRAWN_POINTS).toSorted((one, other) => one.x - other.x),
     })),

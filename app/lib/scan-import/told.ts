@@ -13,6 +13,8 @@ export interface FileAsked {
 /** A profile of a file, thinned for drawing, m. */
 export interface ToldProfile {
   name: string;
+  /** what its head proposes, degrees; nothing where it says none */
+  azimuth: string;
   points: number;
   trace: { x: number; z: number }[];
 }

@@ -1,5 +1,6 @@
 import { excerpt } from "#app/lib/excerpt.ts";
 import type { ImportProfile } from "#app/schemas/import-profile.ts";
+import type { ScanReadingResult } from "#app/schemas/scan-reading.ts";
 import type { FileFormat, FileReading, SkippedRow } from "#app/schemas/scan-result.ts";
 import type { FileProfile, ProfileFile } from "./profile-rows.ts";
 import { LENGTH_UNITS, type Reading } from "./reading.ts";
@@ -43,14 +44,6 @@ export function unheadedProfile(read: ScanRead, profile: ImportProfile): ImportP
 }
 
 /**
- * Reads a file that holds one profile as an import profile says; what the profile leaves out is told by the file.
- * @throws ScanFileError with a sentence that says what is wrong, or still open, where, and what to do
- */
-export function readProfileBy(bytes: Uint8Array, fileName: string, profile: ImportProfile): ReadProfile {
-  return onlyProfile(readScanFile(bytes, fileName, profile), fileName);
-}
-
-/**
  * The only profile of a file that was read.
  * @throws ScanFileError when it holds none or several, or leaves open what they are
  */
@@ -68,7 +61,21 @@ export function onlyProfile(read: ScanRead, fileName: string): ReadProfile {
     throw new ScanFileError(
       `${name} holds ${read.content.profiles.length} profiles: ${read.content.profiles.map((each) => `“${excerpt(each.name, 30)}”`).join(", ")}. Export the one that is meant to a file of its own.`,
     );
-  return { points: { x: only.x, z: only.z }, reading: fileReading(read.reading, read.content, only) };
+  return { points: { x: only.x, z: only.z }, reading: fileReading(read.reading, read.content, about(only, only.x.length)) };
+}
+
+/**
+ * One of the profiles that a stored reading holds, as the file was read then. Where points were averaged, the ends are those of the
+ * averages.
+ * @returns null when the reading has no such profile
+ */
+export function storedProfile({ reading, content }: ScanReadingResult, which: number): ReadProfile | null {
+  const profile = content.kind === "profiles" ? content.profiles[which] : undefined;
+  if (content.kind !== "profiles" || !profile) return null;
+  const [x, z] = [Float64Array.from(profile.x), Float64Array.from(profile.z)];
+  const [from, to] = x.reduce(([low = 0, high = 0], at) => [Math.min(low, at), Math.max(high, at)], [Infinity, -Infinity]);
+  const read = about({ ...profile, x, from: from ?? 0, to: to ?? 0 }, profile.points);
+  return { points: { x, z }, reading: fileReading(reading, content, read) };
 }
 
 /** Nothing but the columns is open, and no head says anything of them. */
@@ -81,8 +88,22 @@ function isOnlyUnheaded({ outcome, reading }: ScanRead): boolean {
   );
 }
 
-function fileReading(reading: Reading, content: ProfileFile, profile: FileProfile): FileReading {
-  const { position, height, x, from, to } = profile;
+/** A profile of a file: its columns, its ends in m, its points in the file and those that a fit is given. */
+interface About extends Pick<FileProfile, "position" | "height" | "from" | "to"> {
+  used: number;
+  fitted: number;
+}
+
+const about = (
+  { position, height, from, to, x }: Pick<FileProfile, "position" | "height" | "from" | "to" | "x">,
+  used: number,
+): About => ({ position, height, from, to, used, fitted: x.length });
+
+function fileReading(
+  reading: Reading,
+  content: Pick<ProfileFile, "rows" | "faulty" | "faults">,
+  { position, height, from, to, used, fitted }: About,
+): FileReading {
   const unitAt = (column: number) => LENGTH_UNITS.find((unit) => unit === reading.columns[column]?.unit) ?? "m";
   const heads = [position, height].map((column) => reading.columns[column]?.heading ?? "");
   const skipped = content.faults
@@ -91,7 +112,7 @@ function fileReading(reading: Reading, content: ProfileFile, profile: FileProfil
     .sort((one, other) => one.row - other.row);
   return {
     rows: content.rows,
-    used: x.length,
+    used,
     columns: reading.columns.length,
     readColumns: [position, height],
     heading: heads.every((head) => head === "") ? null : excerpt(heads.join(", "), LONGEST_HEAD),
@@ -100,6 +121,7 @@ function fileReading(reading: Reading, content: ProfileFile, profile: FileProfil
     to,
     skipped,
     skippedInAll: content.faulty,
+    ...(fitted < used ? { averagedTo: fitted } : {}),
     // A file without any mark reads the same under either.
     format: {
       positionUnit: unitAt(position),

@@ -24,6 +24,8 @@ function detail(tail: string): ScanDetail {
     program: { id: "1", name: "Tern", slug: "tern" },
     film: { id: "1", name: "Polymer dielectric A", stress: 30e6, stressTolerance: 3e6, source: "measured here" },
     files: { before: file("before.csv"), after: file("after.csv") },
+    placed: null,
+    undo: { may: false, use: null },
     parameters: PARAMETERS,
     result,
     working: shownWorking(

@@ -22,6 +22,8 @@ export async function batchFile(
     file: new File(["x"], name),
     profile: {},
     revision: 1,
+    azimuths: {},
+    instrument: null,
     of: { ...guessFromName(name), ...of },
     done: null,
     told: await toldOf(bytes, {}, name),

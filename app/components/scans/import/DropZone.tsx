@@ -24,8 +24,8 @@ export function DropZone({ onFiles, passedOver, most }: Props) {
         {over ? "Let go to read the files here" : "Drop the files of the instrument here"}
       </p>
       <p className="mb-3 max-w-160 text-quiet">
-        Scans before and after a film, as many as belong together. They are read in this browser; nothing is sent before
-        you import.
+        Scans, summaries of lots, thickness maps: as many as there are. They are read in this browser; nothing is sent
+        before you import.
       </p>
       <label htmlFor={id}>Or choose files</label>
       <input

@@ -4,7 +4,7 @@ import { count } from "#app/components/ui/RunProgress.tsx";
 import { fileSize } from "#app/lib/file-size.ts";
 import type { BatchChange, BatchFile } from "#app/lib/scan-import/batch.ts";
 import { guessFromName } from "#app/lib/scan-import/name-guess.ts";
-import { labelOf } from "#app/lib/scan-import/pairs.ts";
+import { kindOf, lineWords } from "#app/lib/scan-import/place-words.ts";
 import type { Told } from "#app/lib/scan-import/told.ts";
 import type { ImportProfile } from "#app/schemas/import-profile.ts";
 import { FileColumns } from "./FileColumns.tsx";
@@ -33,9 +33,8 @@ export function FileItem({ file, known, others, change }: Props) {
   // A question unfolds its file; from then on folding is left to the person.
   const [unfolded, setUnfolded] = useState<boolean | null>(null);
   const open = unfolded ?? told?.outcome === "question";
-  const placed = isTable(file)
-    ? ""
-    : [labelOf(of), of.side === "" ? "" : `${of.side} the film`].filter((text) => text !== "").join(", ");
+  const placed =
+    kindOf(file) === "profiles" ? `${lineWords(of)}${of.side === "" ? "" : `, ${of.side} the film`}` : kindOf(file);
   return (
     <li className="border-t border-line py-2 first:border-0">
       <h3>
@@ -52,7 +51,7 @@ export function FileItem({ file, known, others, change }: Props) {
             <span className="font-semibold wrap-anywhere">{raw.name}</span>{" "}
             <span className="text-quiet">
               {fileSize(raw.size)}
-              {placed === "" ? "" : `; ${placed}`}
+              {`; ${placed}`}
             </span>
           </span>
         </button>
@@ -88,9 +87,6 @@ function Fold({ open }: { open: boolean }) {
     </svg>
   );
 }
-
-/** A file that is no scan of one line, so that it has no place on a wafer. */
-const isTable = ({ told }: BatchFile) => (told?.layout?.reading.kind ?? "profiles") !== "profiles";
 
 /** How a file stands: being read, read, asked about or refused. */
 function FileState({ file: { file, done, told } }: { file: BatchFile }) {
@@ -129,7 +125,7 @@ interface BodyProps extends Props {
 }
 
 function FileBody({ id, file, known, others, change, onChanged, onAnswered }: BodyProps) {
-  const { key, told, profile, of } = file;
+  const { key, told, profile } = file;
   const { name } = file.file;
   const onProfile = (next: ImportProfile) => {
     onChanged();
@@ -149,9 +145,13 @@ function FileBody({ id, file, known, others, change, onChanged, onAnswered }: Bo
           }}
         />
       )}
-      {!isTable(file) && (
-        <FilePlace of={of} proposed={guessFromName(name)} onOf={(next) => change({ kind: "of", key, of: next })} />
-      )}
+      <FilePlace
+        file={file}
+        kind={kindOf(file)}
+        proposed={guessFromName(name)}
+        onOf={(next) => change({ kind: "of", key, of: next })}
+        onAzimuth={(profile, azimuth) => change({ kind: "azimuth", key, profile, azimuth })}
+      />
       <FileLayout reading={layout?.reading ?? null} profile={profile} onProfile={onProfile} />
       <div className="grid items-start gap-x-6 gap-y-4 wide:grid-cols-[minmax(0,1fr)_22rem]">
         {layout && (
@@ -171,8 +171,13 @@ function FileBody({ id, file, known, others, change, onChanged, onAnswered }: Bo
         </div>
       </div>
       <FileProfile
-        {...{ file, known, others, onProfile }}
-        onProfileOfAll={(next) => change({ kind: "profile of all", from: key, profile: next })}
+        {...{ file, known, others }}
+        onInstrument={(chosen) => {
+          onChanged();
+          change({ kind: "instrument", key, instrument: chosen?.id ?? null, profile: chosen?.profile ?? {} });
+        }}
+        onKept={(instrument) => change({ kind: "instrument", key, instrument })}
+        onProfileOfAll={() => change({ kind: "profile of all", from: key })}
       />
     </div>
   );

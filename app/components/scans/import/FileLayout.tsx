@@ -9,7 +9,7 @@ import {
   type Reading,
 } from "#app/lib/scan-reading/reading.ts";
 import type { ImportProfile } from "#app/schemas/import-profile.ts";
-import { DELIMITER_WORDS } from "../delimiter-words.ts";
+import { DELIMITER_WORDS } from "#app/lib/scan-reading/delimiter-words.ts";
 
 interface Props {
   reading: Reading | null;

@@ -1,4 +1,4 @@
-import { useId, useState } from "react";
+import { useEffect, useId, useRef, useState } from "react";
 import { useFetcher } from "react-router";
 import { SelectField } from "#app/components/ui/SelectField.tsx";
 import { keptProfile } from "#app/lib/scan-import/answers.ts";
@@ -18,12 +18,14 @@ interface Props {
   known: readonly KnownProfile[];
   /** whether there are other files to apply it to */
   others: boolean;
-  onProfile: (profile: ImportProfile) => void;
-  onProfileOfAll: (profile: ImportProfile) => void;
+  onInstrument: (chosen: KnownProfile | null) => void;
+  /** a profile was kept for the instrument, under this id */
+  onKept: (instrument: string) => void;
+  onProfileOfAll: () => void;
 }
 
 /** Takes what was answered to the other files, keeps it for the instrument, or takes what was kept. */
-export function FileProfile({ file, known, others, onProfile, onProfileOfAll }: Props) {
+export function FileProfile({ file, known, others, onInstrument, onKept, onProfileOfAll }: Props) {
   const reading = file.told?.layout?.reading ?? null;
   const answered = Object.keys(file.profile).length > 0;
   const [applied, setApplied] = useState(false);
@@ -32,22 +34,23 @@ export function FileProfile({ file, known, others, onProfile, onProfileOfAll }: 
       <SelectField
         name="use"
         label="Use profile of an instrument"
+        hint={file.instrument === null ? undefined : "Its name stays on the scan"}
         blank={known.length === 0 ? "None is kept yet" : "Choose"}
         options={known.map(({ id, name }) => ({ value: id, label: name }))}
         disabled={known.length === 0}
-        value={known.find(({ profile }) => JSON.stringify(profile) === JSON.stringify(file.profile))?.id ?? ""}
-        onChange={({ currentTarget: { value } }) => onProfile(known.find(({ id }) => id === value)?.profile ?? {})}
+        value={file.instrument ?? ""}
+        onChange={({ currentTarget: { value } }) => onInstrument(known.find(({ id }) => id === value) ?? null)}
       />
       {reading !== null && file.told?.outcome === "read" && (
-        <KeepProfile profile={keptProfile(reading, file.profile)} />
+        <KeepProfile profile={keptProfile(reading, file.profile)} onKept={onKept} />
       )}
-      {others && answered && (
+      {others && (answered || file.instrument !== null) && (
         <div className="wide:pt-5">
           <button
             type="button"
             className="btn"
             onClick={() => {
-              onProfileOfAll(file.profile);
+              onProfileOfAll();
               setApplied(true);
             }}
           >
@@ -62,12 +65,19 @@ export function FileProfile({ file, known, others, onProfile, onProfileOfAll }: 
   );
 }
 
-function KeepProfile({ profile }: { profile: ImportProfile }) {
+function KeepProfile({ profile, onKept }: { profile: ImportProfile } & Pick<Props, "onKept">) {
   const id = useId();
   const fetcher = useFetcher<KeptAnswer>();
   const [name, setName] = useState("");
   const busy = fetcher.state !== "idle";
   const fault = busy ? undefined : fetcher.data?.fault;
+  const kept = busy ? undefined : fetcher.data?.kept;
+  const told = useRef<string>(undefined);
+  useEffect(() => {
+    if (!kept || told.current === kept.id) return;
+    told.current = kept.id;
+    onKept(kept.id);
+  }, [kept, onKept]);
   return (
     <div className="field">
       <label htmlFor={id}>Keep for this instrument, under its name</label>
@@ -93,7 +103,7 @@ function KeepProfile({ profile }: { profile: ImportProfile }) {
         </button>
       </div>
       <small id={`${id}-note`} aria-live="polite">
-        {fault ?? (!busy && fetcher.data?.kept ? `Kept as ${fetcher.data.kept}` : "For its next files")}
+        {fault ?? (kept ? `Kept as ${kept.name}` : "For its next files")}
       </small>
     </div>
   );

@@ -6,12 +6,13 @@ import { UnsavedGuard } from "#app/components/forms/UnsavedGuard.tsx";
 import { RunProgress } from "#app/components/ui/RunProgress.tsx";
 import { useInBrowser } from "#app/components/ui/use-in-browser.ts";
 import { MOST_FILES } from "#app/lib/scan-import/batch.ts";
-import { batchPairs } from "#app/lib/scan-import/pairs.ts";
+import { kindOf } from "#app/lib/scan-import/place-words.ts";
+import { batchPlan } from "#app/lib/scan-import/plan.ts";
 import { BatchForm } from "./BatchForm.tsx";
 import { DropZone } from "./DropZone.tsx";
 import { FileItem } from "./FileItem.tsx";
 import type { KnownProfile } from "./FileProfile.tsx";
-import { PairList } from "./PairList.tsx";
+import { ImportList } from "./ImportList.tsx";
 import { useBatch } from "./use-batch.ts";
 import { useImport } from "./use-import.ts";
 
@@ -23,17 +24,19 @@ interface Props {
 
 const FORM = "import-batch";
 
-/** Import of many files at once: read here, asked about here, sent as pairs. */
+/** Import of many files at once: read here, asked about here, sent one by one. */
 export function ImportScreen({ programs, films, profiles }: Props) {
   const { batch, change } = useBatch();
   const { files } = batch;
   const leave = useCallback((keys: string[]) => change({ kind: "remove", keys }), [change]);
-  const { sending, kept, refused, errors, finished, send } = useImport(leave);
+  const { sending, results, refused, errors, finished, send } = useImport(leave);
   const add = useCallback((chosen: readonly File[]) => change({ kind: "add", files: chosen }), [change]);
-  const planned = useMemo(() => batchPairs(files), [files]);
+  const plan = useMemo(() => batchPlan(files), [files]);
   const lastResult = useMemo(() => resultOf(errors), [errors]);
-  const { pairs } = planned;
-  const begun = files.length > 0 || kept.length > 0;
+  const ready = plan.items.reduce((sum, item) => sum + item.files.length, 0);
+  const begun = files.length > 0 || results.length > 0;
+  const onlyTables = files.length > 0 && files.every((file) => kindOf(file) !== "profiles");
+  const counted = ready === 1 ? "1 file" : `${ready} files`;
   if (!useInBrowser())
     return (
       <p className="max-w-160">
@@ -46,7 +49,7 @@ export function ImportScreen({ programs, films, profiles }: Props) {
     );
   return (
     <>
-      <UnsavedGuard dirty={pairs.length > 0 || sending !== null} />
+      <UnsavedGuard dirty={ready > 0 || sending !== null} />
       <DropZone onFiles={add} passedOver={batch.passedOver} most={MOST_FILES} />
       {begun && (
         <div className="frame mt-4">
@@ -64,26 +67,22 @@ export function ImportScreen({ programs, films, profiles }: Props) {
             id={FORM}
             programs={programs}
             films={films}
+            onlyTables={onlyTables}
             lastResult={lastResult}
             onImport={(shared) => {
-              if (sending === null && pairs.length > 0) void send(pairs, shared);
+              if (sending === null && ready > 0) void send(plan.items, shared);
             }}
           />
-          <section aria-labelledby="batch-pairs" className="border-t border-ink p-4 tablet:px-6">
-            <h2 id="batch-pairs" className="mb-1 font-semibold">
-              {pairs.length === 1 ? "1 pair to import" : `${pairs.length} pairs to import`}
+          <section aria-labelledby="batch-import" className="border-t border-ink p-4 tablet:px-6">
+            <h2 id="batch-import" className="mb-1 font-semibold">
+              {counted} to import
             </h2>
-            <PairList planned={planned} kept={kept} refused={refused} />
+            <ImportList plan={plan} results={results} refused={refused} />
             <div className="mt-3 flex flex-wrap items-center gap-3">
-              <button
-                type="submit"
-                form={FORM}
-                className="btn btn-primary"
-                disabled={sending !== null || pairs.length === 0}
-              >
-                {sending !== null ? "Importing" : pairs.length === 1 ? "Import 1 pair" : `Import ${pairs.length} pairs`}
+              <button type="submit" form={FORM} className="btn btn-primary" disabled={sending !== null || ready === 0}>
+                {sending !== null ? "Importing" : `Import ${counted}`}
               </button>
-              {sending !== null && <RunProgress done={sending.done} of={sending.of} label="Pairs imported" />}
+              {sending !== null && <RunProgress done={sending.done} of={sending.of} label="Files imported" />}
               <p role="status" className="text-quiet">
                 {finished && outcomeWords(finished)}
               </p>

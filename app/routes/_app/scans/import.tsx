@@ -1,4 +1,4 @@
-import { data } from "react-router";
+import { data, Link } from "react-router";
 import { z } from "zod";
 import { PageHead } from "#app/components/layout/PageHead.tsx";
 import { ImportScreen } from "#app/components/scans/import/ImportScreen.tsx";
@@ -31,7 +31,7 @@ export async function action({ request, context }: Route.ActionArgs) {
   const read = keptSchema.safeParse(Object.fromEntries(await request.formData()));
   if (!read.success) return refused(z.flattenError(read.error));
   const saved = await saveImportProfile(scope, { id: null, version: null, values: read.data });
-  if (saved.outcome === "saved") return data<KeptAnswer>({ kept: read.data.name });
+  if (saved.outcome === "saved") return data<KeptAnswer>({ kept: { id: saved.id, name: read.data.name } });
   return data<KeptAnswer>({ fault: "An instrument of that name has a profile already. Choose another name." }, 409);
 }
 
@@ -47,7 +47,15 @@ function refused({ fieldErrors, formErrors }: z.core.$ZodFlattenedError<z.output
 export default function ImportScans({ loaderData }: Route.ComponentProps) {
   return (
     <>
-      <PageHead title="Import scans" crumbs={[{ name: "Scans", path: "/scans" }]} />
+      <PageHead
+        title="Import scans"
+        crumbs={[{ name: "Scans", path: "/scans" }]}
+        actions={
+          <Link to="/import-profiles" className="btn">
+            Import profiles
+          </Link>
+        }
+      />
       <ImportScreen {...loaderData} />
     </>
   );

@@ -9,6 +9,7 @@ import { programsWhere } from "#app/policies/permissions.ts";
 import { scopeOf } from "#app/server/contexts.server.ts";
 import { withinPages } from "#app/server/list-page.server.ts";
 import { listScans, SCAN_SORTS, scanPrograms } from "#app/services/scans.server.ts";
+import { countWaiting } from "#app/services/wafers/waiting.server.ts";
 import type { Route } from "./+types/list";
 
 export const meta: Route.MetaFunction = () => [{ title: "Scans · Planeward" }];
@@ -22,11 +23,12 @@ export async function loader({ context, url }: Route.LoaderArgs) {
     page,
     programs: programs.map(({ programName, programSlug }) => ({ value: programSlug, label: programName })),
     mayUpload: programsWhere(scope.actor, "upload scans").length > 0,
+    waiting: await countWaiting(scope),
   };
 }
 
 export default function Scans({ loaderData }: Route.ComponentProps) {
-  const { page, programs, mayUpload } = loaderData;
+  const { page, programs, mayUpload, waiting } = loaderData;
   const searched = page.params.query !== "" || Object.values(page.params.filters).some(Boolean);
   const upload = mayUpload && (
     <>
@@ -48,6 +50,12 @@ export default function Scans({ loaderData }: Route.ComponentProps) {
         remark={searched ? `${page.total} found` : counted}
         actions={
           <>
+            <Link to="/lots" className="btn">
+              Lots
+            </Link>
+            <Link to="/scans/waiting" className="btn">
+              {waiting === 0 ? "Files that wait" : waiting === 1 ? "1 file waits" : `${waiting} files wait`}
+            </Link>
             <Link to="/jobs" className="btn">
               Work under way
             </Link>

@@ -1,0 +1,102 @@
+import { Link } from "react-router";
+import { formatQuantity, formatWithUncertainty } from "#app/engine/units/format.ts";
+import { withoutUnit } from "#app/lib/format-measured.ts";
+import { COVERAGE } from "#app/lib/scan-answer.ts";
+import { WAFER_FIGURES, type WaferFigure, type WaferFigureName } from "#app/lib/wafer-figures.ts";
+import type { LotWafer } from "#app/schemas/lot-view.ts";
+
+const HEADS: Record<WaferFigureName, { head: string; unit: string; sign?: boolean }> = {
+  bow: { head: "Bow", unit: "µm", sign: true },
+  warp: { head: "Warp", unit: "µm" },
+  thickness: { head: "Thickness", unit: "µm" },
+  "thickness variation": { head: "TTV", unit: "µm" },
+  stress: { head: "Film stress", unit: "MPa", sign: true },
+};
+
+/**
+ * The wafers of a lot by slot, the newest of each figure. How a column was measured stands once in its head; where its wafers were
+ * measured in different ways it stands with each, because only like is compared with like.
+ */
+export function LotWafers({ wafers }: { wafers: readonly LotWafer[] }) {
+  const ways = Object.fromEntries(WAFER_FIGURES.map((name) => [name, wayOf(wafers, name)])) as Record<
+    WaferFigureName,
+    string | null
+  >;
+  return (
+    <>
+      <div className="overflow-x-auto" tabIndex={0} role="region" aria-label="Wafers of the lot">
+        <table className="table border-t border-ink">
+          <caption className="sr-only">Wafers of the lot by slot, the newest of each figure</caption>
+          <thead>
+            <tr>
+              <th scope="col" className="num">
+                Slot
+              </th>
+              <th scope="col">Wafer</th>
+              {WAFER_FIGURES.map((name) => (
+                <th key={name} scope="col" className="num min-w-24">
+                  {HEADS[name].head}
+                  <span className="block">{`${HEADS[name].unit}${name === "stress" ? ", k = 2 where ± stands" : ""}`}</span>
+                  {ways[name] && <span className="block max-w-48 text-quiet ml-auto">{ways[name]}</span>}
+                </th>
+              ))}
+              <th scope="col" className="num">
+                Scans
+              </th>
+            </tr>
+          </thead>
+          <tbody>
+            {wafers.map(({ id, slot, name, figures, scans, waiting }) => (
+              <tr key={id}>
+                <td className="num">{slot ?? <span className="text-quiet">–</span>}</td>
+                <th scope="row" className="font-normal">
+                  <Link to={`/wafers/${id}`} className="link wrap-anywhere">
+                    {name}
+                  </Link>
+                </th>
+                {WAFER_FIGURES.map((figure) => (
+                  <td key={figure} className="num">
+                    <Figure figure={figures[figure]} name={figure} told={ways[figure] !== null} />
+                  </td>
+                ))}
+                <td className="num">
+                  {scans}
+                  {waiting > 0 && <span className="block text-label text-quiet">{waiting} waiting</span>}
+                </td>
+              </tr>
+            ))}
+          </tbody>
+        </table>
+      </div>
+      <p className="mt-2 text-label text-quiet">
+        Bow as its tool gives it: with the device side up, centre above the reference plane is positive.
+      </p>
+    </>
+  );
+}
+
+/** How and when all wafers of a column were measured; null when they were not measured alike, nothing when none was. */
+function wayOf(wafers: readonly LotWafer[], name: WaferFigureName): string | null {
+  const ways = new Set(wafers.flatMap(({ figures }) => (figures[name] ? [way(figures[name])] : [])));
+  if (ways.size > 1) return null;
+  const [only = ""] = ways;
+  return only;
+}
+
+const way = ({ how, on }: WaferFigure) => [how, on].filter((text) => text !== "").join(", ");
+
+function Figure({ figure, name, told }: { figure: WaferFigure | undefined; name: WaferFigureName; told: boolean }) {
+  if (!figure) return <span className="text-quiet">–</span>;
+  const { unit, sign } = HEADS[name];
+  const dimension = name === "stress" ? "stress" : "length";
+  const text =
+    figure.uncertainty === null
+      ? formatQuantity(figure.value, dimension, { unit, sign })
+      : formatWithUncertainty(figure.value, COVERAGE * figure.uncertainty, dimension, { unit, sign });
+  return (
+    <>
+      <span className="whitespace-nowrap">{withoutUnit(text)}</span>
+      {!told && <span className="block text-label text-quiet">{way(figure)}</span>}
+    </>
+  );
+}
