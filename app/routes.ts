@@ -77,6 +77,12 @@ export default [
       route("files/:fileId", "routes/_app/scans/file.ts"),
       route(":scanId", "routes/_app/scans/scan.tsx"),
     ]),
+    ...prefix("instruments", [
+      index("routes/_app/instruments/list.tsx"),
+      route(":instrumentId", "routes/_app/instruments/instrument.tsx"),
+      route(":instrumentId/study", "routes/_app/instruments/study.tsx"),
+      route(":instrumentId/reference", "routes/_app/instruments/reference.tsx"),
+    ]),
     route("jobs", "routes/_app/jobs.tsx"),
     route("sheets", "routes/_app/sheets/list.tsx"),
     route("method", "routes/_app/method.tsx"),

@@ -25,6 +25,9 @@ const READ_AND_WRITE = [
   "step_template",
   "flow_template",
   "import_profile",
+  "repeatability_study",
+  "reference_wafer",
+  "reference_reading",
   "scan",
   "job",
 ];

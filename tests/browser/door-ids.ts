@@ -64,6 +64,7 @@ export async function ternIds(engineer: APIRequestContext): Promise<DoorIds> {
       stepTemplateId: await idOf(query, "select id from step_template order by name limit 1"),
       flowTemplateId: await idOf(query, "select id from flow_template order by name limit 1"),
       materialId: await idOf(query, "select id from bonding_material order by name limit 1"),
+      instrumentId: await idOf(query, "select id from import_profile order by name limit 1"),
       recordId: await idOf(query, "select id from carrier order by name limit 1"),
     };
   });

@@ -48,6 +48,9 @@ export default function Scans({ loaderData }: Route.ComponentProps) {
         remark={searched ? `${page.total} found` : counted}
         actions={
           <>
+            <Link to="/instruments" className="btn">
+              Instruments
+            </Link>
             <Link to="/jobs" className="btn">
               Work under way
             </Link>
