@@ -1,11 +1,13 @@
-import { formatBare } from "#app/lib/format-measured.ts";
+import { formatQuantity } from "#app/engine/units/format.ts";
+import { withoutUnit } from "#app/lib/format-measured.ts";
+import { signedMicrometres } from "#app/lib/reference-summary.ts";
 import type { ReferenceView } from "#app/schemas/instrument.ts";
 import { SetAside } from "./SetAside.tsx";
 
 /** The readings of a wafer of known bow, oldest first, each against it. */
 export function ReferenceTable({ reference, mayCheck }: { reference: ReferenceView; mayCheck: boolean }) {
   const { wafer, readings, summary } = reference;
-  const um = (metres: number) => formatBare(metres, "length", "µm");
+  const um = (metres: number) => withoutUnit(formatQuantity(metres, "length", { unit: "µm", decimals: 2 }));
   return (
     <div className="overflow-x-auto" tabIndex={0} role="region" aria-label={`Readings of ${wafer.name}`}>
       <table className="table">
@@ -35,7 +37,7 @@ export function ReferenceTable({ reference, mayCheck }: { reference: ReferenceVi
                   )}
                 </th>
                 <td className="num">{um(bow)}</td>
-                <td className="num">{um(error)}</td>
+                <td className="num">{withoutUnit(signedMicrometres(error))}</td>
                 <td>{setAside === null ? agreesWords(passes) : `set aside: ${setAside}`}</td>
               </tr>
             );
