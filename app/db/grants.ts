@@ -29,6 +29,10 @@ const READ_AND_WRITE = [
   "reference_wafer",
   "reference_reading",
   "scan",
+  "lot",
+  "wafer",
+  "wafer_scan",
+  "wafer_measurement",
   "job",
 ];
 

@@ -49,6 +49,10 @@ const SUBJECTS: Record<string, string> = {
   ScanFile: "scan file",
   Scan: "scan",
   ScanReading: "scan reading",
+  Lot: "lot",
+  Wafer: "wafer",
+  WaferScan: "placed scan",
+  WaferMeasurement: "wafer measurement",
 };
 
 /** Columns that say nothing to a reader, or that must not be copied. */
@@ -61,6 +65,7 @@ const LEFT_OUT = new Set([
   "updatedBy",
   "passwordHash",
   "bytes",
+  "content",
   "input",
   "result",
 ]);

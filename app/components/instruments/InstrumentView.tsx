@@ -114,6 +114,10 @@ function figuresOf(study: StudyView | null, { references }: InstrumentDetail): A
     : [{ label: "Repeatability", value: "not known", working: quiet("no study counts") }];
   return [
     ...about,
-    { label: "Reference wafer last read", value: newest ?? "never", working: quiet(readings.length === 1 ? "1 reading" : `${readings.length} readings`) },
+    {
+      label: "Reference wafer last read",
+      value: newest ?? "never",
+      working: quiet(readings.length === 1 ? "1 reading" : `${readings.length} readings`),
+    },
   ];
 }

@@ -13,6 +13,7 @@ import { FlowStepFilm } from "./flow-step-film.ts";
 import { FlowTemplate } from "./flow-template.ts";
 import { ImportProfile } from "./import-profile.ts";
 import { Job } from "./job.ts";
+import { Lot } from "./lot.ts";
 import { Membership } from "./membership.ts";
 import { Person } from "./person.ts";
 import { Program } from "./program.ts";
@@ -29,6 +30,9 @@ import { Stack } from "./stack.ts";
 import { StackLayer } from "./stack-layer.ts";
 import { StepTemplate } from "./step-template.ts";
 import { Tape } from "./tape.ts";
+import { Wafer } from "./wafer.ts";
+import { WaferMeasurement } from "./wafer-measurement.ts";
+import { WaferScan } from "./wafer-scan.ts";
 
 /** Every entity, listed by hand: the ORM finds nothing by itself. */
 export const entities = [
@@ -59,8 +63,12 @@ export const entities = [
   ReferenceWafer,
   ReferenceReading,
   ScanFile,
-  Scan,
   ScanReading,
+  Lot,
+  Wafer,
+  WaferScan,
+  WaferMeasurement,
+  Scan,
   Job,
   AuditEvent,
 ];

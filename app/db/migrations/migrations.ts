@@ -13,6 +13,7 @@ import { CarrierExpansionCurve } from "./2026-12-06-carrier-expansion-curve.ts";
 import { FilmLines } from "./2026-12-06-film-lines.ts";
 import { Jobs } from "./2026-12-06-jobs.ts";
 import { Tapes } from "./2026-12-06-tapes.ts";
+import { Wafers } from "./2026-12-07-wafers.ts";
 import { Instruments } from "./2026-12-07-instruments.ts";
 
 /** Every migration in the order in which it runs. */
@@ -32,5 +33,6 @@ export const migrations = [
   { name: "2026-12-06-carrier-expansion-curve", class: CarrierExpansionCurve },
   { name: "2026-12-06-tapes", class: Tapes },
   { name: "2026-12-06-jobs", class: Jobs },
+  { name: "2026-12-07-wafers", class: Wafers },
   { name: "2026-12-07-instruments", class: Instruments },
 ];
