@@ -77,6 +77,7 @@ export default [
       route("files/:fileId", "routes/_app/scans/file.ts"),
       route(":scanId", "routes/_app/scans/scan.tsx"),
     ]),
+    route("wafers/:waferId", "routes/_app/wafers/wafer.tsx"),
     ...prefix("instruments", [
       index("routes/_app/instruments/list.tsx"),
       route(":instrumentId", "routes/_app/instruments/instrument.tsx"),

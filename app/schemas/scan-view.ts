@@ -1,5 +1,6 @@
 import type { SourceKind } from "#app/engine/vocabulary.ts";
 import type { ShownWorking } from "#app/lib/shown-working.ts";
+import type { FilmAnalysis } from "./film-analysis.ts";
 import type { ScanParameters, ScanResult } from "./scan-result.ts";
 
 /** A scan as a list shows it; SI, standard uncertainties. */
@@ -49,6 +50,10 @@ export interface ScanDetail {
   parameters: ScanParameters;
   result: ScanResult;
   working: ShownWorking;
+  /** the wafer that it is of, where that was said */
+  wafer: { id: string; name: string } | null;
+  /** what its points and all that is known beside them say; null where they give no answer */
+  analysis: FilmAnalysis | null;
   engineVersion: string;
   createdAt: string;
   createdBy: string;

@@ -74,6 +74,7 @@ const DOORS: Record<string, string> = {
   "/scans/import/pair": "302 403 404 404 404 404 403",
   "/scans/files/:fileId": "302 404 200 200 200 200 404",
   "/scans/:scanId": "302 404 200 200 200 200 404",
+  "/wafers/:waferId": "302 404 200 200 200 200 404",
   "/instruments": "302 403 200 200 200 200 200",
   "/instruments/:instrumentId": "302 403 200 200 200 200 200",
   "/instruments/:instrumentId/study": "302 403 200 200 200 200 403",

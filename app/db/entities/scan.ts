@@ -22,7 +22,7 @@ export const Scan = defineEntity({
     /** null for a pair that was uploaded without a wafer */
     wafer: () => p.manyToOne(Wafer).nullable().deleteRule("restrict").index(),
     /** of the scans' x axis from the notch, counter-clockwise seen on the device side, rad; null where nobody has said */
-    azimuth: p.double().nullable(),
+    azimuth: p.double().$type<number>().nullable(),
     /** null for an instrument without an import profile of its own, and after that was removed */
     instrument: () => p.manyToOne(ImportProfile).nullable().deleteRule("set null"),
     /** the instrument as it was called when the files came; nothing where nobody said */

@@ -19,7 +19,7 @@ export const WaferScan = defineEntity({
     profile: p.integer(),
     wafer: () => p.manyToOne(Wafer).index(),
     /** of the scan's x axis from the notch, counter-clockwise seen on the device side, rad */
-    azimuth: p.double(),
+    azimuth: p.double().$type<number>(),
     side: p.text().$type<WaferScanSide>(),
     /** null for an instrument without an import profile of its own, and after that was removed */
     instrument: () => p.manyToOne(ImportProfile).nullable().deleteRule("set null"),

@@ -14,6 +14,7 @@ import { addDemoInstrument } from "./demo-instrument.ts";
 import { addDemoLibrary } from "./demo-library.ts";
 import { addDemoScan } from "./demo-scan.ts";
 import { addDemoStack, DEMO_STACKS } from "./demo-stacks.ts";
+import { addDemoWafer } from "./demo-wafer.ts";
 import { seedLibrary } from "./seed-library.ts";
 
 const PROGRAMS = [
@@ -22,7 +23,8 @@ const PROGRAMS = [
   { name: "Fulmar", slug: "fulmar", diameter: 0.3, purpose: "Stacked device with through-silicon vias, to 20 µm" },
 ];
 
-/** The invented pilot line: people, library, three programs with their flows whole and a stack each, an assessment, a scan and its instrument. */
+/** The invented pilot line: people, library, three programs with their flows whole and a stack each, an assessment, scans and their
+ * instrument. */
 export class DemoSeeder extends Seeder {
   override async run(em: EntityManager): Promise<void> {
     noteScope(em, { personId: null, requestId: "demo data" });
@@ -54,6 +56,8 @@ export class DemoSeeder extends Seeder {
     await addDemoAssessment(em, await who("engineer@kestrel-ridge.example"));
     await addDemoScan(em, await who("technician@kestrel-ridge.example"));
     addDemoInstrument(em, await who("technician@kestrel-ridge.example"));
+    await em.flush();
+    await addDemoWafer(em, await who("technician@kestrel-ridge.example"));
     await em.flush();
   }
 }

@@ -1,13 +1,12 @@
 import { randomUUID } from "node:crypto";
 import { RepeatabilityStudy } from "#app/db/entities/repeatability-study.ts";
 import { EngineInputError } from "#app/engine/errors.ts";
-import { fitScan } from "#app/engine/profile/fit-scan.ts";
-import { columnsOf } from "#app/engine/profile/columns.ts";
 import { ENGINE_VERSION } from "#app/engine/version.ts";
 import { excerpt } from "#app/lib/excerpt.ts";
 import { checkOnWafer } from "#app/lib/profile-on-wafer.ts";
-import { readProfileBy } from "#app/lib/scan-reading/one-profile.ts";
+import { readingFigures } from "#app/lib/reading-figures.ts";
 import { ScanFileError } from "#app/lib/scan-reading/refusal.ts";
+import { readScanFile } from "#app/lib/scan-reading/scan-reader.ts";
 import { readTypedRepeats } from "#app/lib/study-readings.ts";
 import { studyFault, studyResult } from "#app/lib/study-result.ts";
 import type { ImportProfile } from "#app/schemas/import-profile.ts";
@@ -104,8 +103,20 @@ async function readFiles(
   return { ok: true, readings };
 }
 
-function curvatureOf(file: UploadedFile, values: StudyValues, profile: ImportProfile): number {
-  const read = readProfileBy(file.bytes, file.name, profile);
-  checkOnWafer(read, excerpt(file.name, 80), values);
-  return fitScan(columnsOf(read.points), { edgeExclusion: values.edgeExclusion, robust: true }).curvature;
+function curvatureOf({ bytes, name }: UploadedFile, values: StudyValues, profile: ImportProfile): number {
+  const short = excerpt(name, 80);
+  const { content } = readingFigures(short, readScanFile(bytes, name, profile), values.edgeExclusion);
+  const profiles = content.kind === "profiles" ? content.profiles : [];
+  const [only, ...others] = profiles;
+  if (!only || others.length > 0)
+    throw new ScanFileError(
+      content.kind === "profiles"
+        ? `${short} holds ${profiles.length} profiles. Export each repeat to a file of its own.`
+        : `${short} is a ${content.kind}, not a profile. Choose the scans, position and height in a row.`,
+    );
+  if (!only.fit)
+    throw new ScanFileError(`${short} runs from the centre to one side. A repeat is a scan across the wafer.`);
+  const points = only.x.map((x, n) => ({ x, z: only.z[n] ?? 0 }));
+  checkOnWafer({ points, reading: { from: Math.min(...only.x), to: Math.max(...only.x) } }, short, values);
+  return only.fit.curvature;
 }
