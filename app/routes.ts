@@ -82,6 +82,13 @@ export default [
     ]),
     ...prefix("lots", [index("routes/_app/lots/list.tsx"), route(":lotId", "routes/_app/lots/lot.tsx")]),
     route("import-profiles", "routes/_app/import-profiles.tsx"),
+    route("wafers/:waferId", "routes/_app/wafers/wafer.tsx"),
+    ...prefix("instruments", [
+      index("routes/_app/instruments/list.tsx"),
+      route(":instrumentId", "routes/_app/instruments/instrument.tsx"),
+      route(":instrumentId/study", "routes/_app/instruments/study.tsx"),
+      route(":instrumentId/reference", "routes/_app/instruments/reference.tsx"),
+    ]),
     route("jobs", "routes/_app/jobs.tsx"),
     route("sheets", "routes/_app/sheets/list.tsx"),
     route("method", "routes/_app/method.tsx"),

@@ -310,7 +310,7 @@ export {
   type ReferenceCheck,
   type RepeatabilityStudy,
 } from "./profile/tool/repeatability.ts";
-export { repeatabilityWorking } from "./profile/tool/working.ts";
+export { referenceCheckWorking, repeatabilityWorking } from "./profile/tool/working.ts";
 export { findMistakes, judged as judgeMistake, MISTAKES } from "./profile/mistakes/find-mistakes.ts";
 export type { Mistake, MistakeFinding, MistakeState } from "./profile/mistakes/mistake.ts";
 export type { CalendarDay, CheckedScan, Estimate, ScanChecks } from "./profile/mistakes/scan-checks.ts";

@@ -21,7 +21,11 @@ const range = ({ from, to }: FileReading) =>
  * Holds a profile against the wafer that it is said to be of: a wrong unit shows here.
  * @throws ScanFileError when positions or heights cannot be of that wafer
  */
-export function checkOnWafer({ points, reading }: ReadProfile, name: string, wafer: ScannedWafer): void {
+export function checkOnWafer(
+  { points, reading }: { points: ReadProfile["points"]; reading: Pick<FileReading, "from" | "to"> },
+  name: string,
+  wafer: ScannedWafer,
+): void {
   const span = reading.to - reading.from;
   const diameter = formatQuantity(wafer.diameter, "length", { unit: "mm" });
   if (span === 0) throw new ScanFileError(`${name}: all rows have the same position, ${length(reading.from)}.`);

@@ -15,6 +15,7 @@ export const SITE_PERMISSIONS = {
   "edit films": ["engineer", "process owner"],
   "edit the step library": ["engineer", "process owner"],
   "keep import profiles": ["technician", "engineer", "process owner", "shift lead"],
+  "check instruments": ["technician", "engineer", "process owner", "shift lead"],
   "edit carriers, bonds and limits": ["process owner", "administrator"],
   "see the audit trail": ["administrator"],
 } as const satisfies Record<string, readonly (ProgramRole | SiteRole)[]>;

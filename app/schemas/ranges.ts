@@ -105,6 +105,11 @@ export const RULES = {
     range: { least: 0, most: 31_536_000, words: "0 to 365 days" },
   },
   bow: { label: "bow", dimension: "length", range: { least: -0.02, most: 0.02, words: "−20 mm to 20 mm" } },
+  curvature: {
+    label: "curvature",
+    dimension: "curvature",
+    range: { least: -20, most: 20, words: "−20 1/m to 20 1/m" },
+  },
   bowUncertainty: {
     label: "standard uncertainty",
     dimension: "length",

@@ -1,5 +1,6 @@
 import type { SourceKind } from "#app/engine/vocabulary.ts";
 import type { ShownWorking } from "#app/lib/shown-working.ts";
+import type { FilmAnalysis } from "./film-analysis.ts";
 import type { ScanParameters, ScanResult } from "./scan-result.ts";
 
 /** A scan as a list shows it; SI, standard uncertainties. */
@@ -59,6 +60,8 @@ export interface ScanDetail {
   parameters: ScanParameters;
   result: ScanResult;
   working: ShownWorking;
+  /** what its points and all that is known beside them say; null where they give no answer */
+  analysis: FilmAnalysis | null;
   engineVersion: string;
   createdAt: string;
   createdBy: string;

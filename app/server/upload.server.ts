@@ -27,6 +27,8 @@ export interface Upload<Field extends string> {
 /** A file up to three times the limit, and not more than so much above it, bytes, is refused at its field; beyond it reading stops. */
 const MOST_ABOVE = 12 * 1024 * 1024;
 const MOST_PARTS = 60;
+/** Files beyond those that belong in a form are read up to so many times their number, so that it can be said. */
+const MORE_FILES = 3;
 
 /**
  * Reads a posted form with files.
@@ -37,25 +39,66 @@ const MOST_PARTS = 60;
 export async function readUpload<Field extends string>(
   request: Request,
   fields: readonly Field[],
-  limit: { bytes: number; words: string },
+  limit: Limit,
 ): Promise<Upload<Field>> {
   const upload: Omit<Upload<Field>, "formData"> = { files: {}, tooLarge: {} };
-  const maxFileSize = Math.min(3 * limit.bytes, limit.bytes + MOST_ABOVE);
+  const maxTotalSize = (readUpTo(limit) + 1) * fields.length;
+  const most = { maxFiles: fields.length, maxTotalSize };
+  const formData = await readParts(request, fields, most, limit, (field, name, file) => {
+    if ("bytes" in file) upload.files[field] = { name, bytes: file.bytes };
+    else upload.tooLarge[field] = { name, size: file.size };
+  });
+  return { ...upload, formData };
+}
+
+/**
+ * The same for a form with one field that takes several files, in the order in which they were chosen.
+ * @param most files that belong in it; some more are read all the same, so that the caller can say so
+ */
+export async function readUploads(
+  request: Request,
+  field: string,
+  most: number,
+  limit: Limit,
+): Promise<{ formData: FormData; files: UploadedFile[]; tooLarge: { name: string; size: number }[] }> {
+  const [files, tooLarge]: [UploadedFile[], { name: string; size: number }[]] = [[], []];
+  const more = { maxFiles: MORE_FILES * most, maxTotalSize: (limit.bytes + 1) * most };
+  const formData = await readParts(request, [field], more, limit, (_, name, file) => {
+    if ("bytes" in file) files.push({ name, bytes: file.bytes });
+    else tooLarge.push({ name, size: file.size });
+  });
+  return { formData, files, tooLarge };
+}
+
+/** Most bytes of a file that are read, so that one that is too large can be refused at its field. */
+const readUpTo = ({ bytes }: Limit) => Math.min(3 * bytes, bytes + MOST_ABOVE);
+
+interface Limit {
+  bytes: number;
+  words: string;
+}
+
+async function readParts<Field extends string>(
+  request: Request,
+  fields: readonly Field[],
+  most: { maxFiles: number; maxTotalSize: number },
+  limit: Limit,
+  take: (field: Field, name: string, file: { bytes: Uint8Array<ArrayBuffer> } | { size: number }) => void,
+): Promise<FormData> {
   try {
     const formData = await parseFormData(
       request,
-      { maxFileSize, maxFiles: fields.length, maxParts: MOST_PARTS, maxTotalSize: (maxFileSize + 1) * fields.length },
+      { ...most, maxFileSize: readUpTo(limit), maxParts: MOST_PARTS + most.maxFiles },
       async (file) => {
         const field = fields.find((name) => name === file.fieldName);
         // A field that was left empty comes as a file without name and content.
         if (field === undefined || (file.name === "" && file.size === 0)) return;
-        const name = safeFileName(file.name);
-        if (file.size > limit.bytes) upload.tooLarge[field] = { name, size: file.size };
-        else upload.files[field] = { name, bytes: await file.bytes() };
+        const large = file.size > limit.bytes;
+        take(field, safeFileName(file.name), large ? { size: file.size } : { bytes: await file.bytes() });
       },
     );
     for (const field of fields) formData.delete(field);
-    return { ...upload, formData };
+    return formData;
   } catch (error) {
     throw refusalOf(error, limit.words);
   }

@@ -3,12 +3,11 @@ import { fittedHeight, levelHeight } from "#app/engine/profile/fitted-height.ts"
 import { smallDeflection } from "#app/engine/profile/small-deflection.ts";
 import { siliconBiaxialModulus } from "#app/engine/silicon/biaxial-modulus.ts";
 import { bowFromCurvature, standardBow } from "#app/engine/stoney/bow.ts";
+import { MODULUS_UNCERTAINTY } from "#app/lib/modulus-uncertainty.ts";
 import type { ReadProfile } from "#app/lib/scan-reading/one-profile.ts";
 import type { ScanContribution, ScanResult } from "#app/schemas/scan-result.ts";
 import type { ScanSubject } from "#app/schemas/scan.ts";
 
-/** Relative standard uncertainty of silicon's biaxial modulus (common practice, no source: 0.5 to 1 %). */
-const MODULUS_UNCERTAINTY = 0.01;
 /** Points that a plot of this width can show. */
 const DRAWN_POINTS = 400;
 const SHOWN_POSITIONS = 12;

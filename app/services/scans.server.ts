@@ -10,6 +10,7 @@ import type { Actor } from "#app/policies/roles.ts";
 import type { ScanDetail, ScanRow } from "#app/schemas/scan-view.ts";
 import { notFound, problem } from "#app/server/problem.server.ts";
 import { inScope, type ActorScope } from "#app/server/scope.server.ts";
+import { analyseScans, FOR_ANALYSIS } from "./film-analysis/analyse-scans.server.ts";
 import { escapeLike } from "./like.server.ts";
 import { requireInProgram } from "./permission.server.ts";
 import { programFilter } from "./program-filter.server.ts";
@@ -104,12 +105,13 @@ export async function getScan(scope: ActorScope, id: string | undefined): Promis
     const scan = await em.findOne(
       Scan,
       { id: idFrom(id, "scan") },
-      { populate: ["program", "film", "before", "after", "wafer.lot", "createdBy", "result"] },
+      { populate: [...FOR_ANALYSIS, "program", "wafer.lot", "createdBy"] },
     );
     if (!scan) throw notFound("scan");
     requireInProgram(scope, "see the work", scan.program.id, "scan");
     const { program, film, parameters } = scan;
     const result = scan.result.get();
+    const { analysis } = await analyseScans(em, [scan as Scan]);
     const file = ({ id: fileId, name, size, hash }: { id: string; name: string; size: number; hash: string }) => ({
       id: fileId,
       name,
@@ -145,6 +147,7 @@ export async function getScan(scope: ActorScope, id: string | undefined): Promis
           biaxialModulus: result.biaxialModulus,
         }),
       ),
+      analysis,
       engineVersion: scan.engineVersion,
       createdAt: scan.createdAt.toISOString(),
       createdBy: scan.createdBy.name,

@@ -19,6 +19,7 @@ export const WALLED: readonly string[] = [
   "fileId",
   "readingId",
   "jobId",
+  "waferId",
 ];
 
 type Query = <Row>(sql: string, params?: unknown[]) => Promise<Row[]>;
@@ -64,6 +65,11 @@ export async function ternIds(engineer: APIRequestContext): Promise<DoorIds> {
       stepTemplateId: await idOf(query, "select id from step_template order by name limit 1"),
       flowTemplateId: await idOf(query, "select id from flow_template order by name limit 1"),
       materialId: await idOf(query, "select id from bonding_material order by name limit 1"),
+      instrumentId: await idOf(query, "select id from import_profile order by name limit 1"),
+      waferId: await idOf(
+        query,
+        "select w.id from wafer w join program p on p.id = w.program_id where p.slug = 'tern'",
+      ),
       recordId: await idOf(query, "select id from carrier order by name limit 1"),
     };
   });
@@ -128,6 +134,7 @@ export function strangeIds(own: DoorIds): Promise<DoorIds> {
       stackId: await copy("stack", own["stackId"]),
       readingId: await copy("scan_reading", own["readingId"], { file_id: fileId }),
       jobId: await copy("job", own["jobId"]),
+      waferId: await copy("wafer", own["waferId"], { lot_id: null }),
       scanId: await copy("scan", own["scanId"], { before_id: fileId, after_id: fileId }),
     };
   });

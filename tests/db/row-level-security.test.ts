@@ -34,6 +34,9 @@ const SITE_TABLES = [
   "step_template",
   "flow_template",
   "import_profile",
+  "repeatability_study",
+  "reference_wafer",
+  "reference_reading",
 ];
 
 let engineer: ActorScope;

@@ -28,6 +28,7 @@ const SITE_TABLE: Record<keyof typeof SITE_PERMISSIONS, string> = {
   "edit films": "         - - - y y -",
   "edit the step library": "- - - y y -",
   "keep import profiles": "   - y y y y -",
+  "check instruments": "   - y y y y -",
   "edit carriers, bonds and limits": "- - - - y y",
   "see the audit trail": "- - - - - y",
 };

@@ -1,3 +1,7 @@
+import { Link } from "react-router";
+import { BothStresses } from "#app/components/film-analysis/BothStresses.tsx";
+import { BudgetTable } from "#app/components/film-analysis/BudgetTable.tsx";
+import { MistakeList } from "#app/components/film-analysis/MistakeList.tsx";
 import { AnswerLine, type AnswerFigure } from "#app/components/drawings/AnswerLine.tsx";
 import { ProfileChart } from "#app/components/charts/ProfileChart.tsx";
 import { formatQuantity, formatWithUncertainty } from "#app/engine/units/format.ts";
@@ -13,7 +17,7 @@ import { ScanInputs } from "./ScanInputs.tsx";
 
 /** A scan on its sheet: the answer, the curves, where the uncertainty comes from, how the files were read. */
 export function ScanView({ scan }: { scan: ScanDetail }) {
-  const { label, film, parameters, result, files } = scan;
+  const { label, film, parameters, result, files, analysis } = scan;
   const mm = (metres: number) => formatQuantity(metres, "length", { unit: "mm", significant: 3, trim: true });
   return (
     <div className="frame">
@@ -21,10 +25,20 @@ export function ScanView({ scan }: { scan: ScanDetail }) {
         {label}, program {scan.program.name}. Read {scan.createdAt.slice(0, 10)} by {scan.createdBy}, engine{" "}
         {scan.engineVersion}.
       </p>
-      <AnswerLine figuresBelow level={2} sentences={scanAnswer(label, film, result)} figures={figuresOf(scan)} />
+      <AnswerLine
+        figuresBelow
+        level={2}
+        sentences={scanAnswer(label, film, withTool(scan))}
+        figures={figuresOf({ ...scan, result: withTool(scan) })}
+      />
       <div className="border-t border-ink p-4 tablet:px-6">
         <ScanRemarks remarks={scanRemarks(parameters, result)} />
       </div>
+      {analysis && (
+        <div className="border-t border-ink p-4 tablet:px-6">
+          <MistakeList mistakes={analysis.mistakes} />
+        </div>
+      )}
       <div className="grid border-t border-ink wide:grid-cols-[minmax(0,3fr)_minmax(0,2fr)]">
         <div className="min-w-0">
           <section className="p-4 tablet:p-6" aria-labelledby="profile">
@@ -39,8 +53,15 @@ export function ScanView({ scan }: { scan: ScanDetail }) {
           </section>
           {!result.curled && (
             <div className="grid border-t border-line tablet:grid-cols-2">
-              <div className="min-w-0 p-4 tablet:p-6">
-                <ScanBudget result={result} />
+              <div className="min-w-0 space-y-6 p-4 tablet:p-6">
+                {analysis ? (
+                  <>
+                    <BothStresses stress={analysis.stress} directional={null} />
+                    <BudgetTable budget={analysis.budget} stress={analysis.stress.stoney} />
+                  </>
+                ) : (
+                  <ScanBudget result={result} />
+                )}
               </div>
               <div className="min-w-0 border-line p-4 max-tablet:border-t tablet:border-l tablet:p-6">
                 <ScanWorking working={scan.working} />
@@ -68,6 +89,12 @@ export function ScanView({ scan }: { scan: ScanDetail }) {
       </div>
     </div>
   );
+}
+
+/** The result with the uncertainty that also knows the instrument. */
+function withTool({ result, analysis }: ScanDetail): ScanDetail["result"] {
+  if (!analysis) return result;
+  return { ...result, stressUncertainty: analysis.stress.stoney.uncertainty / COVERAGE };
 }
 
 function figuresOf({ result }: ScanDetail): AnswerFigure[] {

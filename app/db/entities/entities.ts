@@ -17,6 +17,9 @@ import { Lot } from "./lot.ts";
 import { Membership } from "./membership.ts";
 import { Person } from "./person.ts";
 import { Program } from "./program.ts";
+import { ReferenceReading } from "./reference-reading.ts";
+import { ReferenceWafer } from "./reference-wafer.ts";
+import { RepeatabilityStudy } from "./repeatability-study.ts";
 import { Scan } from "./scan.ts";
 import { ScanFile } from "./scan-file.ts";
 import { ScanReading } from "./scan-reading.ts";
@@ -56,6 +59,9 @@ export const entities = [
   FlowTemplate,
   Assessment,
   ImportProfile,
+  RepeatabilityStudy,
+  ReferenceWafer,
+  ReferenceReading,
   ScanFile,
   ScanReading,
   Lot,

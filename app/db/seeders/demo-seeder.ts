@@ -10,9 +10,11 @@ import { DEMO_PEOPLE } from "./demo-accounts.ts";
 import { addDemoAssessment } from "./demo-assessment.ts";
 import { addDemoFlow } from "./demo-flow.ts";
 import { DEMO_FLOWS } from "./demo-flows.ts";
+import { addDemoInstrument } from "./demo-instrument.ts";
 import { addDemoLibrary } from "./demo-library.ts";
 import { addDemoScan } from "./demo-scan.ts";
 import { addDemoStack, DEMO_STACKS } from "./demo-stacks.ts";
+import { addDemoWafer } from "./demo-wafer.ts";
 import { seedLibrary } from "./seed-library.ts";
 
 const PROGRAMS = [
@@ -21,7 +23,8 @@ const PROGRAMS = [
   { name: "Fulmar", slug: "fulmar", diameter: 0.3, purpose: "Stacked device with through-silicon vias, to 20 µm" },
 ];
 
-/** The invented pilot line: people, library, three programs with their flows whole and a stack each, an assessment and a scan. */
+/** The invented pilot line: people, library, three programs with their flows whole and a stack each, an assessment, scans and their
+ * instrument. */
 export class DemoSeeder extends Seeder {
   override async run(em: EntityManager): Promise<void> {
     noteScope(em, { personId: null, requestId: "demo data" });
@@ -52,6 +55,9 @@ export class DemoSeeder extends Seeder {
     const who = (account: string) => em.findOneOrFail(Person, { email: account });
     await addDemoAssessment(em, await who("engineer@kestrel-ridge.example"));
     await addDemoScan(em, await who("technician@kestrel-ridge.example"));
+    addDemoInstrument(em, await who("technician@kestrel-ridge.example"));
+    await em.flush();
+    await addDemoWafer(em, await who("technician@kestrel-ridge.example"));
     await em.flush();
   }
 }

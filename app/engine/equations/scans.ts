@@ -132,6 +132,18 @@ export const SCANS = {
     range: "Wafers taken off and put back between readings.",
     sources: ["gum-2008"],
   },
+  "reference-check": {
+    title: "Bias of a tool on a wafer of known figure",
+    formula: "b = Σ (x_i − X) / n, u_b^2 = u^2 / n + u_X^2",
+    symbols: [
+      { symbol: "b", meaning: "bias: mean of read less known; told when larger than 2 u_b", unit: "1" },
+      { symbol: "x_i", meaning: "reading i, of n", unit: "1" },
+      { symbol: "X", meaning: "known figure; u_X its standard uncertainty, common to all readings", unit: "1" },
+      { symbol: "u", meaning: "standard uncertainty of one reading, from a repeatability study", unit: "1" },
+    ],
+    range: "Readings of one wafer on one tool.",
+    sources: ["gum-2008"],
+  },
   "control-limits": {
     title: "Control limits of individual values",
     formula: "L = m ± 2.66 MR, L_MR = 3.267 MR",

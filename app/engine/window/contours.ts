@@ -19,8 +19,18 @@ export function contours(
   const pieces: [ContourPoint, ContourPoint][] = [];
   for (let row = 0; row + 1 < y.length; row += 1)
     for (let column = 0; column + 1 < x.length; column += 1)
-      pieces.push(...cellPieces(x, y, values, level, column, row));
+      if (isCrossed(values, row * x.length + column, x.length, level))
+        pieces.push(...cellPieces(x, y, values, level, column, row));
   return joined(pieces);
+}
+
+/** Whether the corners of a cell are known and lie on both sides of the level: most cells are passed over here, without an object. */
+function isCrossed(values: readonly (number | null)[], at: number, width: number, level: number): boolean {
+  const [a, b, c, d] = [values[at], values[at + 1], values[at + width], values[at + width + 1]];
+  if (a === null || a === undefined || b === null || b === undefined) return false;
+  if (c === null || c === undefined || d === null || d === undefined) return false;
+  const above = a >= level;
+  return b >= level !== above || c >= level !== above || d >= level !== above;
 }
 
 type Corner = ContourPoint & { off: number };

@@ -21,6 +21,7 @@ function detail(tail: string): ScanDetail {
   return {
     id: "1",
     label: "M-0388",
+    analysis: null,
     program: { id: "1", name: "Tern", slug: "tern" },
     film: { id: "1", name: "Polymer dielectric A", stress: 30e6, stressTolerance: 3e6, source: "measured here" },
     files: { before: file("before.csv"), after: file("after.csv") },

@@ -83,6 +83,7 @@ export function shapeFigures(i: ShapeFiguresInput): ShapeFigures {
   const at = Math.min(radius - POINTS_INSIDE, surface.radius);
   const within = `within ${mm(surface.radius)} of the centre, edge exclusion ${mm(radius - surface.radius)}`;
   const points = [0, 1, 2].map((n) => first + (2 * Math.PI * n) / 3);
+  const warp = peakToValley(levelled(median));
   return {
     bow: {
       name: "bow",
@@ -101,13 +102,13 @@ export function shapeFigures(i: ShapeFiguresInput): ShapeFigures {
     },
     warp: {
       name: "warp",
-      ...peakToValley(levelled(median)),
+      ...warp,
       definition: `Highest less lowest deviation of the median surface from its least-squares plane ${within}.`,
       source: "semi-mf1390",
     },
     sori: {
       name: "sori",
-      ...peakToValley(levelled(front)),
+      ...(front === median ? warp : peakToValley(levelled(front))),
       definition: `Highest less lowest deviation of the front surface from its least-squares plane ${within}.`,
       source: "semi-mf1451",
     },
@@ -115,8 +116,10 @@ export function shapeFigures(i: ShapeFiguresInput): ShapeFigures {
   };
 }
 
-/** The surface less its least-squares plane. */
+/** The surface less its least-squares plane; one that has none, as from scans through the centre, is itself. */
 function levelled(surface: Surface): Surface {
+  if (surface.terms.every(({ n, value, standardUncertainty }) => n >= 2 || (value === 0 && standardUncertainty === 0)))
+    return surface;
   const flat = surface.terms.map(({ n }) => n < 2);
   return {
     ...surface,
@@ -156,8 +159,22 @@ function peakToValley(surface: Surface): { value: number; standardUncertainty: n
   ]);
 }
 
+interface Extremes {
+  low: Place & { z: number };
+  high: Place & { z: number };
+}
+
+/** Found once for each surface: figures and contours both ask. */
+const found = new WeakMap<Surface, Extremes>();
+
 /** Highest and lowest place of a surface on its disk. */
-export function extremes(surface: Surface): { low: Place & { z: number }; high: Place & { z: number } } {
+export function extremes(surface: Surface): Extremes {
+  const known = found.get(surface) ?? search(surface);
+  found.set(surface, known);
+  return known;
+}
+
+function search(surface: Surface): Extremes {
   const height = surfaceEvaluator(surface);
   let low = { x: 0, y: 0, z: height(0, 0) };
   let high = low;

@@ -28,7 +28,8 @@ const SHIFT = { x: 0.37, y: 0.21 } as const;
 export function surfaceContours(surface: Surface, count = DEFAULT_LEVELS): SurfaceContours {
   requireWithin("count", count, 1, 100, "1");
   const { radius } = surface;
-  const [low, high] = [extremes(surface).low.z, extremes(surface).high.z];
+  const ends = extremes(surface);
+  const [low, high] = [ends.low.z, ends.high.z];
   const step = roundStep((high - low) / count);
   if (step === 0) return { radius, low, high, step, levels: [] };
   const reach = radius * (1 + 4 / CELLS);

@@ -3,9 +3,8 @@ import { fitSurface, type SurfaceInput } from "./fit-surface.ts";
 import { shapeFigures, type ShapeFigure, type ShapeFigures, type ShapeFiguresInput } from "./shape-figures.ts";
 import { zernikeBasis } from "./zernike.ts";
 
-/** Bow, best-fit bow, warp and sori of `shapeFigures` as data, in this order. */
-export function shapeFiguresWorkings(i: ShapeFiguresInput): Working[] {
-  const figures = shapeFigures(i);
+/** Bow, best-fit bow, warp and sori of `shapeFigures` as data, in this order; `figures` where they are at hand already. */
+export function shapeFiguresWorkings(i: ShapeFiguresInput, figures: ShapeFigures = shapeFigures(i)): Working[] {
   return [figures.bow, figures.bowBestFit, figures.warp, figures.sori].map((figure) => workingOf(figure, i, figures));
 }
 

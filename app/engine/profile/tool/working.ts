@@ -1,5 +1,5 @@
 import type { UnitSymbol, Working } from "../../working.ts";
-import { repeatabilityStudy } from "./repeatability.ts";
+import { referenceCheck, repeatabilityStudy } from "./repeatability.ts";
 
 /** The standard uncertainty of `repeatabilityStudy` as data, in the unit of its readings. */
 export function repeatabilityWorking(wafers: readonly (readonly number[])[], unit: UnitSymbol): Working {
@@ -18,5 +18,21 @@ export function repeatabilityWorking(wafers: readonly (readonly number[])[], uni
     ],
     result: { symbol: "u", meaning: "standard uncertainty of one reading, for k = 2", value: study.forTwo, unit },
     note: study.remark ?? undefined,
+  };
+}
+
+/** The bias of `referenceCheck` as data, in the unit of its readings. */
+export function referenceCheckWorking(i: Parameters<typeof referenceCheck>[0], unit: UnitSymbol): Working {
+  const { bias, biasUncertainty } = referenceCheck(i);
+  return {
+    equation: "reference-check",
+    inputs: [
+      { symbol: "X", meaning: "known figure", value: i.known.value, unit },
+      { symbol: "u_X", meaning: "its standard uncertainty", value: i.known.standardUncertainty, unit },
+      { symbol: "u", meaning: "standard uncertainty of one reading", value: i.toolUncertainty, unit },
+      { symbol: "n", meaning: "readings", value: i.readings.length, unit: "1" },
+      { symbol: "u_b", meaning: "standard uncertainty of the bias", value: biasUncertainty, unit },
+    ],
+    result: { symbol: "b", meaning: "bias, read less known", value: bias, unit },
   };
 }

@@ -56,6 +56,9 @@ export default function Scans({ loaderData }: Route.ComponentProps) {
             <Link to="/scans/waiting" className="btn">
               {waiting === 0 ? "Files that wait" : waiting === 1 ? "1 file waits" : `${waiting} files wait`}
             </Link>
+            <Link to="/instruments" className="btn">
+              Instruments
+            </Link>
             <Link to="/jobs" className="btn">
               Work under way
             </Link>

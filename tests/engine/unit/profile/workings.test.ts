@@ -19,8 +19,8 @@ import {
   fullStressWorking,
   stressBudgetWorking,
 } from "#app/engine/profile/stress/working.ts";
-import { repeatabilityStudy } from "#app/engine/profile/tool/repeatability.ts";
-import { repeatabilityWorking } from "#app/engine/profile/tool/working.ts";
+import { referenceCheck, repeatabilityStudy } from "#app/engine/profile/tool/repeatability.ts";
+import { referenceCheckWorking, repeatabilityWorking } from "#app/engine/profile/tool/working.ts";
 import { azimuthsWorking, fitScanWorking } from "#app/engine/profile/working.ts";
 import type { Working } from "#app/engine/working.ts";
 
@@ -61,6 +61,11 @@ const points = [1, 2, 3].map((predicted) => ({
   predictedUncertainty: 0.1,
   measuredUncertainty: 0.1,
 }));
+const reference = {
+  known: { value: 45, standardUncertainty: 0.2 },
+  readings: [45.1, 45.4, 45.2].map((value, at) => ({ at: at * 86_400, value })),
+  toolUncertainty: 0.3,
+};
 const azimuths = fitAzimuths(readings);
 const shape = shapeFigures(figures);
 
@@ -77,6 +82,7 @@ const cases: [string, Working | null, number | null][] = [
   ["directional stress", directionalStressWorking(directional), directionalFilmStress(directional).principal.high],
   ["budget", stressBudgetWorking(budget), stressBudget(budget).expandedUncertainty],
   ["repeatability", repeatabilityWorking(repeats, "m"), repeatabilityStudy(repeats).forTwo],
+  ["reference check", referenceCheckWorking(reference, "m"), referenceCheck(reference).bias],
   ["control limits", controlLimitsWorking(values, "Pa"), controlChart(values).limits.upper],
   ["accepted value", acceptedValueWorking(accepted, "Pa", 0.2), acceptedValue(accepted, 0.2).standardUncertainty],
   ["parity", parityWorking(points, "m"), predictedAgainstMeasured(points).all.bias],

@@ -1,0 +1,33 @@
+import type { EntityManager } from "@mikro-orm/postgresql";
+import type { Scan } from "#app/db/entities/scan.ts";
+import { EngineInputError } from "#app/engine/errors.ts";
+import { analyseFilm } from "#app/lib/film-analysis/analyse.ts";
+import type { FilmAnalysis } from "#app/schemas/film-analysis.ts";
+import { filmSubject } from "./film-subject.server.ts";
+import { pairOfScan, type KnownTools } from "./pair-of-scan.server.ts";
+
+/** What the analysis of some scans needs of their entities. */
+export const FOR_ANALYSIS = ["film", "instrument", "before", "after", "result"] as const;
+
+export type Analysed = { analysis: FilmAnalysis; fault: null } | { analysis: null; fault: string };
+
+/** What scans of one film on one wafer say together, the newest first, or why they say nothing. */
+export async function analyseScans(em: EntityManager, [newest, ...others]: [Scan, ...Scan[]]): Promise<Analysed> {
+  const tools: KnownTools = new Map();
+  const pairs = [];
+  for (const scan of [newest, ...others]) pairs.push(await pairOfScan(em, scan, tools));
+  const subject = await filmSubject(em, {
+    film: newest.film ?? null,
+    program: newest.program.id,
+    wafer: newest.wafer?.id ?? null,
+    parameters: newest.parameters,
+  });
+  const now = new Date();
+  const today = { year: now.getUTCFullYear(), month: now.getUTCMonth() + 1, day: now.getUTCDate() };
+  try {
+    return { analysis: analyseFilm(pairs, subject, today), fault: null };
+  } catch (error) {
+    if (!(error instanceof EngineInputError)) throw error;
+    return { analysis: null, fault: `The scans give no answer together: ${error.field} ${error.reason}.` };
+  }
+}
