@@ -30,6 +30,8 @@ const SITE_TABLES = [
   "step_template",
   "flow_template",
   "import_profile",
+  "film_stress_value",
+  "film_stress_in_use",
 ];
 
 let engineer: ActorScope;
@@ -143,7 +145,7 @@ describe("a write", () => {
     expect(touched).toEqual([{ slug: "tern" }]);
   });
 
-  test.each(["assessment", "scan_file", "audit_event"])("never changes or deletes a row of %s", async (table) => {
+  test.each(["assessment", "scan_file", "audit_event", "film_stress_in_use"])("never changes or deletes a row of %s", async (table) => {
     await expect(forgetful(engineer, `update "${table}" set id = id`)).rejects.toThrow(/permission denied/);
     await expect(forgetful(engineer, `delete from "${table}"`)).rejects.toThrow(/permission denied/);
   });

@@ -6,6 +6,8 @@ import { CarrierUnit } from "./carrier-unit.ts";
 import { Credential } from "./credential.ts";
 import { Equipment } from "./equipment.ts";
 import { Film } from "./film.ts";
+import { FilmStressInUse } from "./film-stress-in-use.ts";
+import { FilmStressValue } from "./film-stress-value.ts";
 import { Flow } from "./flow.ts";
 import { FlowRevision } from "./flow-revision.ts";
 import { FlowStep } from "./flow-step.ts";
@@ -55,6 +57,8 @@ export const entities = [
   ScanFile,
   Scan,
   ScanReading,
+  FilmStressValue,
+  FilmStressInUse,
   Job,
   AuditEvent,
 ];

@@ -10,6 +10,7 @@ import { ImportProfiles } from "./2026-12-06-import-profiles.ts";
 import { CarrierPieceVariation } from "./2026-12-06-carrier-piece-variation.ts";
 import { DebondFace } from "./2026-12-06-debond-face.ts";
 import { CarrierExpansionCurve } from "./2026-12-06-carrier-expansion-curve.ts";
+import { FilmStress } from "./2026-12-07-film-stress.ts";
 import { FilmLines } from "./2026-12-06-film-lines.ts";
 import { Jobs } from "./2026-12-06-jobs.ts";
 import { Tapes } from "./2026-12-06-tapes.ts";
@@ -31,4 +32,5 @@ export const migrations = [
   { name: "2026-12-06-carrier-expansion-curve", class: CarrierExpansionCurve },
   { name: "2026-12-06-tapes", class: Tapes },
   { name: "2026-12-06-jobs", class: Jobs },
+  { name: "2026-12-07-film-stress", class: FilmStress },
 ];
