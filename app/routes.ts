@@ -22,6 +22,7 @@ export default [
       route("new", "routes/_app/films/new.tsx"),
       route(":filmId", "routes/_app/films/detail.tsx"),
       route(":filmId/edit", "routes/_app/films/edit.tsx"),
+      route(":filmId/stress.csv", "routes/_app/films/stress-csv.ts"),
     ]),
     ...prefix("stacks", [
       index("routes/_app/stacks/list.tsx"),
@@ -76,6 +77,7 @@ export default [
       route("import/pair", "routes/_app/scans/import-pair.ts"),
       route("files/:fileId", "routes/_app/scans/file.ts"),
       route(":scanId", "routes/_app/scans/scan.tsx"),
+      route(":scanId/accept", "routes/_app/scans/accept.tsx"),
     ]),
     route("jobs", "routes/_app/jobs.tsx"),
     route("sheets", "routes/_app/sheets/list.tsx"),

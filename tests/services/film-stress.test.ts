@@ -220,14 +220,14 @@ describe("setting aside", () => {
   });
 
   test("is a conflict on an old page, twice refused, never of the last value in use, and no technician's", async () => {
-    const { setValueAside, putValueBack, useMean } = await changing();
+    const { setValueAside, putValueBack, putMeanIntoUse } = await changing();
     const [row] = (await historyOf(engineer)).page.rows;
     const id = row?.id;
     const old = { filmId: film, version: 1 };
     expect(await setValueAside(engineer, old, { id, reason: "x" })).toMatchObject({ outcome: "conflict" });
     expect(await putValueBack(engineer, await asked(), { id })).toMatchObject({ outcome: "refused" });
     await expect(setValueAside(technician, old, { id, reason: "x" })).rejects.toEqual(status(403));
-    await expect(useMean(technician, old)).rejects.toEqual(status(403));
+    await expect(putMeanIntoUse(technician, old)).rejects.toEqual(status(403));
     const oxide = await idOf("film", "Back-side oxide A (low temperature)");
     await accept(await scanOf(301, { filmId: oxide }), { use: true });
     const one = await historyOf(engineer, "", oxide);
@@ -242,10 +242,10 @@ describe("setting aside", () => {
 });
 
 test("a value measured elsewhere is typed in with its source, and the mean can be put into use by a press", async () => {
-  const { addTypedValue, useMean } = await changing();
+  const { addTypedValue, putMeanIntoUse } = await changing();
   const copper = await idOf("film", "Plated copper A");
   const version = async () => (await historyOf(engineer, "", copper)).film.version;
-  expect(await useMean(engineer, { filmId: copper, version: await version() })).toMatchObject({ outcome: "refused" });
+  expect(await putMeanIntoUse(engineer, { filmId: copper, version: await version() })).toMatchObject({ outcome: "refused" });
   const typed = {
     value: 24e6,
     uncertainty: 2e6,
@@ -258,7 +258,7 @@ test("a value measured elsewhere is typed in with its source, and the mean can b
   expect(await addTypedValue(engineer, { filmId: copper, version: await version() }, typed)).toMatchObject({
     outcome: "saved",
   });
-  expect(await useMean(engineer, { filmId: copper, version: await version() })).toMatchObject({ outcome: "saved" });
+  expect(await putMeanIntoUse(engineer, { filmId: copper, version: await version() })).toMatchObject({ outcome: "saved" });
   expect(await stressOf(copper)).toMatchObject({
     value: 24e6,
     tolerance: expect.closeTo(1e6 * Math.sqrt(3), -2),
@@ -285,9 +285,9 @@ test("a film that is saved without a change to its stress goes on using the mean
   const { usesMean, inUse } = await historyOf(engineer);
   expect(usesMean).toBe(false);
   expect(inUse[0]?.stress).toMatchObject({ value: 25e6, note: "by hand" });
-  const { useMean } = await changing();
+  const { putMeanIntoUse } = await changing();
   const { film: now } = await historyOf(engineer);
-  await useMean(engineer, { filmId: film, version: now.version });
+  await putMeanIntoUse(engineer, { filmId: film, version: now.version });
   expect((await stressOf()).meanOf).toBeGreaterThan(1);
 });
 

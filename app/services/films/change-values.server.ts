@@ -120,6 +120,6 @@ export async function addTypedValue(scope: ActorScope, asked: Asked, typed: Type
 }
 
 /** Puts the mean of the accepted values into use; from then on it follows them. */
-export async function useMean(scope: ActorScope, asked: Asked): Promise<HistoryChanged> {
+export async function putMeanIntoUse(scope: ActorScope, asked: Asked): Promise<HistoryChanged> {
   return changeHistory(scope, asked, () => Promise.resolve(null), { take: true });
 }

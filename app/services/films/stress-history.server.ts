@@ -7,7 +7,7 @@ import { acceptedValueWorking } from "#app/engine/profile/lot-figures/working.ts
 import { meanInputs, stressMean } from "#app/lib/film-mean.ts";
 import { readListParams, type ListParams } from "#app/lib/list-params.ts";
 import { shownWorking } from "#app/lib/shown-working.ts";
-import { pageOfValues, STRESS_SORTS, UNNAMED } from "#app/lib/stress-values.ts";
+import { chosenValues, pageOfValues, STRESS_SORTS, UNNAMED } from "#app/lib/stress-values.ts";
 import { mayOnSite, programsWhere } from "#app/policies/permissions.ts";
 import type { FilmStressHistory, StressInUseRow, StressOrigin, StressValueRow } from "#app/schemas/film-stress.ts";
 import { notFound } from "#app/server/problem.server.ts";
@@ -18,7 +18,7 @@ import { usesMean } from "./film-values.server.ts";
 import { chartOf, instrumentsOf } from "./stress-chart.ts";
 
 /** Address parameters of the history on a film's page. */
-export const readHistoryParams = (search: URLSearchParams): ListParams =>
+const readHistoryParams = (search: URLSearchParams): ListParams =>
   readListParams(search, { sorts: STRESS_SORTS, filters: ["state", "instrument"], descending: true });
 
 /**
@@ -31,20 +31,9 @@ export async function stressHistory(
   filmId: string | undefined,
   search: URLSearchParams,
 ): Promise<FilmStressHistory> {
-  requireOnSite(scope, "see the library");
   const params = readHistoryParams(search);
   return inScope(scope, async (em) => {
-    const film = await em.findOne(Film, { id: idFrom(filmId, "film") });
-    if (!film) throw notFound("film");
-    const values = await em.find(
-      FilmStressValue,
-      { film },
-      {
-        populate: ["acceptedBy", "setAsideBy", "putBackBy"],
-        orderBy: { measuredAt: "asc", acceptedAt: "asc", id: "asc" },
-      },
-    );
-    const rows = rowsOf(values, await originsOf(em, scope, values));
+    const { film, values, rows } = await read(em, scope, filmId);
     const instruments = instrumentsOf(rows);
     const instrument = instruments.find((name) => (name || UNNAMED) === params.filters["instrument"]) ?? instruments[0];
     const { readings, common } = meanInputs(values);
@@ -61,6 +50,33 @@ export async function stressHistory(
       mayEdit: mayOnSite(scope.actor, "edit films"),
     };
   });
+}
+
+/** The values that a search and filters leave of a film's history, all pages of them, with the film's name. */
+export async function stressValues(
+  scope: ActorScope,
+  filmId: string | undefined,
+  search: URLSearchParams,
+): Promise<{ film: string; rows: StressValueRow[] }> {
+  return inScope(scope, async (em) => {
+    const { film, rows } = await read(em, scope, filmId);
+    return { film: film.name, rows: chosenValues(rows, readHistoryParams(search)) };
+  });
+}
+
+async function read(em: EntityManager, scope: ActorScope, filmId: string | undefined) {
+  requireOnSite(scope, "see the library");
+  const film = await em.findOne(Film, { id: idFrom(filmId, "film") });
+  if (!film) throw notFound("film");
+  const values = await em.find(
+    FilmStressValue,
+    { film },
+    {
+      populate: ["acceptedBy", "setAsideBy", "putBackBy"],
+      orderBy: { measuredAt: "asc", acceptedAt: "asc", id: "asc" },
+    },
+  );
+  return { film, values, rows: rowsOf(values, await originsOf(em, scope, values)) };
 }
 
 /** Scans behind the values that the person may see, by their ids. Filtered here as well as by the database. */

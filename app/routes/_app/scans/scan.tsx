@@ -1,6 +1,8 @@
+import { ScanInHistory } from "#app/components/films/ScanInHistory.tsx";
 import { PageHead } from "#app/components/layout/PageHead.tsx";
 import { ScanView } from "#app/components/scans/ScanView.tsx";
 import { scopeOf } from "#app/server/contexts.server.ts";
+import { acceptedAs } from "#app/services/films/accept-scan.server.ts";
 import { getScan } from "#app/services/scans.server.ts";
 import type { Route } from "./+types/scan";
 
@@ -9,11 +11,13 @@ export const meta: Route.MetaFunction = ({ loaderData }) => [
 ];
 
 export async function loader({ context, params }: Route.LoaderArgs) {
-  return { scan: await getScan(scopeOf(context), params.scanId) };
+  const scope = scopeOf(context);
+  const scan = await getScan(scope, params.scanId);
+  return { scan, accepted: await acceptedAs(scope, scan.id) };
 }
 
 export default function Scan({ loaderData }: Route.ComponentProps) {
-  const { scan } = loaderData;
+  const { scan, accepted } = loaderData;
   return (
     <>
       <PageHead
@@ -22,6 +26,7 @@ export default function Scan({ loaderData }: Route.ComponentProps) {
         remark={`${scan.program.name}, ${scan.createdAt.slice(0, 10)} ${scan.createdAt.slice(11, 16)} UTC, ${scan.createdBy}, engine ${scan.engineVersion}`}
       />
       <ScanView scan={scan} />
+      <ScanInHistory scanId={scan.id} accepted={accepted} curled={scan.result.curled !== null} />
     </>
   );
 }
