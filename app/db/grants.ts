@@ -28,6 +28,10 @@ const READ_AND_WRITE = [
   "flow_template",
   "import_profile",
   "scan",
+  "lot",
+  "wafer",
+  "wafer_scan",
+  "wafer_measurement",
   "job",
 ];
 

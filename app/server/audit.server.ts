@@ -47,6 +47,10 @@ const SUBJECTS: Record<string, string> = {
   Scan: "scan",
   ScanReading: "scan reading",
   FilmStressValue: "stress of a film",
+  Lot: "lot",
+  Wafer: "wafer",
+  WaferScan: "placed scan",
+  WaferMeasurement: "wafer measurement",
 };
 
 /** Columns that say nothing to a reader, or that must not be copied. */
@@ -59,6 +63,7 @@ const LEFT_OUT = new Set([
   "updatedBy",
   "passwordHash",
   "bytes",
+  "content",
   "input",
   "result",
 ]);

@@ -16,6 +16,10 @@ const PROGRAM_TABLES = [
   "scan_file",
   "scan",
   "scan_reading",
+  "lot",
+  "wafer",
+  "wafer_scan",
+  "wafer_measurement",
   "job",
 ];
 const SITE_TABLES = [

@@ -15,6 +15,7 @@ import { FlowStepFilm } from "./flow-step-film.ts";
 import { FlowTemplate } from "./flow-template.ts";
 import { ImportProfile } from "./import-profile.ts";
 import { Job } from "./job.ts";
+import { Lot } from "./lot.ts";
 import { Membership } from "./membership.ts";
 import { Person } from "./person.ts";
 import { Program } from "./program.ts";
@@ -28,6 +29,9 @@ import { Stack } from "./stack.ts";
 import { StackLayer } from "./stack-layer.ts";
 import { StepTemplate } from "./step-template.ts";
 import { Tape } from "./tape.ts";
+import { Wafer } from "./wafer.ts";
+import { WaferMeasurement } from "./wafer-measurement.ts";
+import { WaferScan } from "./wafer-scan.ts";
 
 /** Every entity, listed by hand: the ORM finds nothing by itself. */
 export const entities = [
@@ -55,10 +59,14 @@ export const entities = [
   Assessment,
   ImportProfile,
   ScanFile,
-  Scan,
   ScanReading,
   FilmStressValue,
   FilmStressInUse,
+  Lot,
+  Wafer,
+  WaferScan,
+  WaferMeasurement,
+  Scan,
   Job,
   AuditEvent,
 ];
