@@ -14,6 +14,8 @@ export interface Acceptance {
   scan: { id: string; label: string; program: string };
   /** ISO day, to begin with */
   measuredOn: string;
+  /** as the scan has it, to begin with; empty when nobody named one */
+  instrument: string;
   /** null for a scan of no film */
   film: { id: string; name: string; version: number; stress: Measured; usesMean: boolean } | null;
   /** why it cannot be accepted; null when it can */

@@ -14,12 +14,14 @@ interface Props {
   film: { version: number; usesMean: boolean };
   instruments: readonly string[];
   measuredOn: string;
+  instrument: string;
   lastResult: SubmissionResult<string[]> | null | undefined;
 }
 
 /** What a person says when they accept a scan. */
-export function AcceptForm({ scan, film, instruments, measuredOn, lastResult }: Props) {
-  const [form, fields] = useRecordForm<Values>({ id: "accept", lastResult, defaultValue: { measuredAt: measuredOn } });
+export function AcceptForm({ scan, film, instruments, measuredOn, instrument, lastResult }: Props) {
+  const defaultValue = { measuredAt: measuredOn, instrument };
+  const [form, fields] = useRecordForm<Values>({ id: "accept", lastResult, defaultValue });
   const known = useId();
   return (
     <Form method="post" {...getFormProps(form)} aria-label="Accept" className="border-t border-ink p-4 tablet:px-6">

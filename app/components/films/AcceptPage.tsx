@@ -17,7 +17,7 @@ interface Props {
 
 /** Taking a scan into its film's history: what is taken, what becomes of the value in use, and why. */
 export function AcceptPage({ acceptance, lastResult }: Props) {
-  const { scan, film, refused, offer, measuredOn } = acceptance;
+  const { scan, film, refused, offer, measuredOn, instrument } = acceptance;
   return (
     <>
       <PageHead
@@ -59,6 +59,7 @@ export function AcceptPage({ acceptance, lastResult }: Props) {
             film={film}
             instruments={offer.instruments}
             measuredOn={measuredOn}
+            instrument={instrument}
             lastResult={lastResult}
           />
         </article>

@@ -15,13 +15,13 @@ import { idFrom } from "../uuid.server.ts";
 import { holdFilm, newValue, takeMean, usesMean, valuesOf } from "./film-values.server.ts";
 import { scanStress, type ScanStress } from "./scan-stress.ts";
 
-type WholeScan = Loaded<Scan, "program" | "film" | "result" | "createdBy">;
+type WholeScan = Loaded<Scan, "program" | "film" | "result" | "createdBy" | "afterScan">;
 
 async function findScan(em: EntityManager, scope: ActorScope, id: string | undefined): Promise<WholeScan> {
   const scan = await em.findOne(
     Scan,
     { id: idFrom(id, "scan") },
-    { populate: ["program", "film", "result", "createdBy"] },
+    { populate: ["program", "film", "result", "createdBy", "afterScan"] },
   );
   if (!scan) throw notFound("scan");
   requireInProgram(scope, "see the work", scan.program.id, "scan");
@@ -49,9 +49,7 @@ export async function acceptedAs(scope: ActorScope, scanId: string | undefined):
 
 const NO_FILM = "No film of the library is named for this scan, so there is no history that it could go into.";
 
-function readingOf(stress: ScanStress, measuredAt: Date): MeanReading {
-  return { ...stress, measuredAt, state: "accepted" };
-}
+const readingOf = (stress: ScanStress, at: Date): MeanReading => ({ ...stress, measuredAt: at, state: "accepted" });
 
 /**
  * What accepting a scan would do: its stress, the film's value in use before and after, and why it cannot be accepted if it cannot.
@@ -61,7 +59,11 @@ export async function acceptance(scope: ActorScope, scanId: string | undefined):
   const found = await inScope(scope, async (em) => {
     const scan = await findScan(em, scope, scanId);
     requireInProgram(scope, "accept stresses", scan.program.id, "scan");
-    const head = { scan: { id: scan.id, label: scan.label, program: scan.program.name }, measuredOn: dayOf(scan) };
+    const head = {
+      scan: { id: scan.id, label: scan.label, program: scan.program.name },
+      measuredOn: measuredAt(scan).toISOString().slice(0, 10),
+      instrument: scan.instrumentName,
+    };
     if (!scan.film) return { ...head, offer: null, refused: NO_FILM, film: null };
     const film = scan.film as Film;
     const own = await em.findOne(FilmStressValue, { scan }, { populate: ["acceptedBy"] });
@@ -77,7 +79,7 @@ export async function acceptance(scope: ActorScope, scanId: string | undefined):
     if (refused !== null || typeof stress === "string")
       return { ...head, offer: null, refused: refused ?? String(stress), film: named };
     const values = await valuesOf(em, film.id);
-    const mean = stressMean([...values, readingOf(stress, scan.createdAt)]);
+    const mean = stressMean([...values, readingOf(stress, measuredAt(scan))]);
     const instruments = [...new Set(values.map(({ instrument }) => instrument).filter(Boolean))];
     return { ...head, offer: mean && { stress, mean, instruments }, refused: null, film: named };
   });
@@ -85,7 +87,8 @@ export async function acceptance(scope: ActorScope, scanId: string | undefined):
   return { ...found, flows: uses.filter(({ kind }) => kind === "flow").length };
 }
 
-const dayOf = (scan: Pick<Scan, "createdAt">) => scan.createdAt.toISOString().slice(0, 10);
+/** When the wafer was measured with its film, as the file says; else when the scan came. */
+const measuredAt = ({ afterScan, createdAt }: WholeScan): Date => afterScan?.measuredAt ?? createdAt;
 
 function alreadyWords({ acceptedAt, acceptedBy, state }: Loaded<FilmStressValue, "acceptedBy">): string {
   const when = `${acceptedAt.toISOString().slice(0, 16).replace("T", " ")} UTC by ${acceptedBy.name}`;
