@@ -16,13 +16,13 @@ export function toleranceWords({ stress, standardUncertainty }: StressMean): str
   const [half, standard] = [stress.tolerance ?? 0, standardUncertainty].map((value) =>
     formatQuantity(value, "stress", { unit: "MPa", significant: 2 }),
   );
-  return `The library keeps a half-width, ±\u00A0${half}, of an interval within which every value is as likely. It is √3 times the standard uncertainty of the next film, ${standard}, so the engine computes with just that.`;
+  return `The library keeps a half-width, ±\u00A0${half}, of an interval within which every value is as likely. It is √3 times the standard uncertainty of the next film, ${standard}: the engine divides by √3 and has it back.`;
 }
 
 /** What a mean rests on, a sentence. */
 export function meanSentence({ count, spread, remark }: StressMean): string {
   const by = formatQuantity(spread, "stress", { unit: "MPa", significant: 2 });
-  const rests =
-    count === 1 ? "It rests on one value." : `It rests on ${count} values; one film differs from another by ${by}.`;
+  if (count === 1) return remark ?? "It rests on one value.";
+  const rests = `It rests on ${count} values; their standard deviation is ${by}.`;
   return remark ? `${rests} ${remark}` : rests;
 }

@@ -47,6 +47,7 @@ const SUBJECTS: Record<string, string> = {
   Scan: "scan",
   ScanReading: "scan reading",
   FilmStressValue: "stress of a film",
+  StepMeasurement: "bow after a step",
   Lot: "lot",
   Wafer: "wafer",
   WaferScan: "placed scan",

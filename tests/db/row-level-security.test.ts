@@ -21,6 +21,7 @@ const PROGRAM_TABLES = [
   "wafer_scan",
   "wafer_measurement",
   "job",
+  "step_measurement",
 ];
 const SITE_TABLES = [
   "film",

@@ -38,7 +38,7 @@ function UseMean({ version, count }: { version: number; count: number }) {
   return (
     <Form method="post" preventScrollReset className="screen-only mt-3 flex flex-wrap items-center gap-3">
       <input type="hidden" name="version" value={version} />
-      <button type="submit" name="intent" value="use mean" className="btn btn-primary" disabled={waiting}>
+      <button type="submit" name="intent" value="use mean" className="btn" disabled={waiting}>
         {waiting ? "Saving" : count === 1 ? "Use the accepted value" : `Use the mean of ${count} accepted values`}
       </button>
       <span className="text-quiet">Assessments that used the old value then say so, and by how much they move.</span>

@@ -27,6 +27,7 @@ import { Silicon } from "./silicon.ts";
 import { SiteLimit } from "./site-limit.ts";
 import { Stack } from "./stack.ts";
 import { StackLayer } from "./stack-layer.ts";
+import { StepMeasurement } from "./step-measurement.ts";
 import { StepTemplate } from "./step-template.ts";
 import { Tape } from "./tape.ts";
 import { Wafer } from "./wafer.ts";
@@ -62,6 +63,7 @@ export const entities = [
   ScanReading,
   FilmStressValue,
   FilmStressInUse,
+  StepMeasurement,
   Lot,
   Wafer,
   WaferScan,

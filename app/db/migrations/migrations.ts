@@ -14,6 +14,7 @@ import { FilmStress } from "./2026-12-07-film-stress.ts";
 import { FilmLines } from "./2026-12-06-film-lines.ts";
 import { Jobs } from "./2026-12-06-jobs.ts";
 import { Tapes } from "./2026-12-06-tapes.ts";
+import { StepMeasurements } from "./2026-12-07-step-measurements.ts";
 import { Wafers } from "./2026-12-07-wafers.ts";
 
 /** Every migration in the order in which it runs. */
@@ -35,4 +36,5 @@ export const migrations = [
   { name: "2026-12-06-jobs", class: Jobs },
   { name: "2026-12-07-film-stress", class: FilmStress },
   { name: "2026-12-07-wafers", class: Wafers },
+  { name: "2026-12-07-step-measurements", class: StepMeasurements },
 ];
