@@ -58,6 +58,7 @@ export default [
       route("tried", "routes/_app/assessments/tried.tsx"),
       route("carriers.csv", "routes/_app/assessments/carriers-csv.ts"),
       route("lot", "routes/_app/assessments/lot.tsx"),
+      route("measured", "routes/_app/assessments/measured.tsx"),
     ]),
     ...prefix("carriers", [
       index("routes/_app/carriers/index.tsx"),
@@ -78,6 +79,10 @@ export default [
       route("files/:fileId", "routes/_app/scans/file.ts"),
       route(":scanId", "routes/_app/scans/scan.tsx"),
       route(":scanId/accept", "routes/_app/scans/accept.tsx"),
+    ]),
+    ...prefix("predictions", [
+      index("routes/_app/predictions/predictions.tsx"),
+      route("points.csv", "routes/_app/predictions/points-csv.ts"),
     ]),
     route("jobs", "routes/_app/jobs.tsx"),
     route("sheets", "routes/_app/sheets/list.tsx"),

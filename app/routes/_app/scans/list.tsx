@@ -48,6 +48,9 @@ export default function Scans({ loaderData }: Route.ComponentProps) {
         remark={searched ? `${page.total} found` : counted}
         actions={
           <>
+            <Link to="/predictions" className="btn">
+              Predicted against measured
+            </Link>
             <Link to="/jobs" className="btn">
               Work under way
             </Link>
