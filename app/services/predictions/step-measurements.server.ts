@@ -23,7 +23,7 @@ export async function stepMeasurements(scope: ActorScope, assessmentId: string |
     const rows = await em.find(
       StepMeasurement,
       { assessment },
-      { populate: ["createdBy", "setAsideBy"], orderBy: { step: "asc", lot: "asc", createdAt: "asc", wafer: "asc" } },
+      { populate: ["createdBy", "setAsideBy"], orderBy: { measuredAt: "asc", id: "asc" } },
     );
     return {
       assessment: { id: assessment.id, number: assessment.number, lot: assessment.lot?.name ?? null },
@@ -34,12 +34,16 @@ export async function stepMeasurements(scope: ActorScope, assessmentId: string |
         return { step, title, predicted: typeof predicted === "string" ? null : predicted };
       }),
       summaries: await summaryChoices(em, program.id),
-      rows: rows.map(rowOf),
+      rows: rows.map(rowOf).toSorted(byPlace),
       mayRecord: mayInProgram(scope.actor, "upload scans", program.id),
       maySetAside: mayInProgram(scope.actor, "run assessments", program.id),
     };
   });
 }
+
+/** By step, lot and wafer; slot 10 comes after slot 9. */
+const byPlace = (a: StepMeasurementRow, b: StepMeasurementRow) =>
+  a.step - b.step || a.lot.localeCompare(b.lot) || a.wafer.localeCompare(b.wafer, "en", { numeric: true });
 
 function rowOf(row: Loaded<StepMeasurement, "createdBy" | "setAsideBy">): StepMeasurementRow {
   const { id, step, stepTitle, lot, wafer, bow, standardUncertainty, stated, predicted, predictedUncertainty } = row;
