@@ -22,6 +22,7 @@ export default [
       route("new", "routes/_app/films/new.tsx"),
       route(":filmId", "routes/_app/films/detail.tsx"),
       route(":filmId/edit", "routes/_app/films/edit.tsx"),
+      route(":filmId/stress.csv", "routes/_app/films/stress-csv.ts"),
     ]),
     ...prefix("stacks", [
       index("routes/_app/stacks/list.tsx"),
@@ -57,6 +58,7 @@ export default [
       route("tried", "routes/_app/assessments/tried.tsx"),
       route("carriers.csv", "routes/_app/assessments/carriers-csv.ts"),
       route("lot", "routes/_app/assessments/lot.tsx"),
+      route("measured", "routes/_app/assessments/measured.tsx"),
     ]),
     ...prefix("carriers", [
       index("routes/_app/carriers/index.tsx"),
@@ -79,6 +81,11 @@ export default [
       route("waiting/:waferScanId", "routes/_app/scans/waiting-file.tsx"),
       route("files/:fileId", "routes/_app/scans/file.ts"),
       route(":scanId", "routes/_app/scans/scan.tsx"),
+      route(":scanId/accept", "routes/_app/scans/accept.tsx"),
+    ]),
+    ...prefix("predictions", [
+      index("routes/_app/predictions/predictions.tsx"),
+      route("points.csv", "routes/_app/predictions/points-csv.ts"),
     ]),
     ...prefix("lots", [index("routes/_app/lots/list.tsx"), route(":lotId", "routes/_app/lots/lot.tsx")]),
     route("import-profiles", "routes/_app/import-profiles.tsx"),

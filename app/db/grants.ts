@@ -1,8 +1,10 @@
 /**
  * What the plain role may do, table by table; run after every migration, so that a new table without a line here is a table
- * that the application cannot touch. Audit, assessments, raw files, their readings and revisions of a flow can only be added.
+ * that the application cannot touch. Audit, assessments, raw files, their readings, revisions of a flow and the stresses that films
+ * had in use can only be added; what was measured of a film or after a step can be set aside, not taken out.
  */
-const ADD_ONLY = ["assessment", "scan_file", "audit_event", "flow_revision", "scan_reading"];
+const ADD_ONLY = ["assessment", "scan_file", "audit_event", "flow_revision", "scan_reading", "film_stress_in_use"];
+const NEVER_TAKEN_OUT = ["film_stress_value", "step_measurement"];
 const READ_AND_WRITE = [
   "person",
   "credential",
@@ -43,6 +45,7 @@ export function grantStatements(role: string): string[] {
     `grant usage on schema public to ${quoted}`,
     `revoke all on all tables in schema public from ${quoted}`,
     ...ADD_ONLY.map((table) => `grant select, insert on "${table}" to ${quoted}`),
+    ...NEVER_TAKEN_OUT.map((table) => `grant select, insert, update on "${table}" to ${quoted}`),
     ...READ_AND_WRITE.map((table) => `grant select, insert, update, delete on "${table}" to ${quoted}`),
   ];
 }

@@ -2,7 +2,8 @@ import type { SourceKind } from "./vocabulary.ts";
 
 /**
  * A property as somebody stated it. `value` in SI; `tolerance` is the half-width of the interval believed to hold the
- * value, null when nobody gave one; `on` is the ISO date of the measurement; `text` is what was typed.
+ * value, null when nobody gave one; `on` is the ISO date of the measurement; `text` is what was typed. `meanOf` is there when it is
+ * the mean of that many measured values, and goes when somebody states another.
  */
 export interface Measured {
   value: number;
@@ -11,6 +12,7 @@ export interface Measured {
   note?: string;
   on?: string | null;
   text?: string;
+  meanOf?: number;
 }
 
 /**

@@ -1,7 +1,7 @@
 /** Addresses that lie in a place without its path before them. */
 const ALSO: Record<string, readonly string[]> = {
   "/flows": ["/assessments"],
-  "/scans": ["/lots", "/wafers", "/instruments", "/import-profiles", "/jobs"],
+  "/scans": ["/lots", "/predictions", "/wafers", "/instruments", "/import-profiles", "/jobs"],
 };
 
 /** Whether an address lies in the place that has the path; the assessment of a flow lies in the flows. */

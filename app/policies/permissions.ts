@@ -5,6 +5,7 @@ export const PROGRAM_PERMISSIONS = {
   "see released sheets": ["guest", "technician", "engineer", "process owner", "shift lead", "administrator"],
   "see the work": ["technician", "engineer", "process owner", "shift lead"],
   "upload scans": ["technician", "engineer", "process owner", "shift lead"],
+  "accept stresses": ["engineer", "process owner"],
   "edit stacks and flows": ["engineer", "process owner"],
   "run assessments": ["engineer", "process owner"],
 } as const satisfies Record<string, readonly (ProgramRole | SiteRole)[]>;

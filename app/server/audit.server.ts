@@ -49,6 +49,8 @@ const SUBJECTS: Record<string, string> = {
   ScanFile: "scan file",
   Scan: "scan",
   ScanReading: "scan reading",
+  FilmStressValue: "stress of a film",
+  StepMeasurement: "bow after a step",
   Lot: "lot",
   Wafer: "wafer",
   WaferScan: "placed scan",
@@ -75,6 +77,10 @@ type Plain = Record<string, unknown>;
 const idOf = (value: unknown): unknown =>
   typeof value === "object" && value !== null && "id" in value ? (value as { id: unknown }).id : value;
 
+/** The program that a record belongs to; of what the site keeps of a program's scan, that of the scan. */
+const programOf = (entity: Plain): unknown =>
+  idOf(entity["program"]) ?? idOf((entity["scan"] as Plain | null | undefined)?.["program"]);
+
 /**
  * Writes one audit event per changed field, in the same flush and so in the same transaction as the change: a change without
  * its event cannot be committed.
@@ -87,7 +93,7 @@ export class AuditSubscriber implements EventSubscriber {
       if (!subject) continue;
       if (!scope) throw new Error(`A ${subject} was changed outside inScope.`);
       const entity = change.entity as Plain;
-      const program = change.meta.className === "Program" ? entity["id"] : idOf(entity["program"]);
+      const program = change.meta.className === "Program" ? entity["id"] : programOf(entity);
       const base = {
         at: new Date(),
         actorId: scope.personId,

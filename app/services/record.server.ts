@@ -7,6 +7,7 @@ import {
 import { randomUUID } from "node:crypto";
 import type { Person } from "#app/db/entities/person.ts";
 import type { RecordStamp } from "#app/schemas/record-stamp.ts";
+import { keepUnchanged } from "#app/lib/keep-unchanged.ts";
 import { notFound } from "#app/server/problem.server.ts";
 import type { ActorScope } from "#app/server/scope.server.ts";
 
@@ -102,7 +103,7 @@ export async function saveNamedRecord(
   if (!record) throw notFound(what);
   const conflict = conflictOf(record, version);
   if (conflict) return { outcome: "conflict", conflict };
-  em.assign(record, values as never, { mergeObjectProperties: false });
+  em.assign(record, keepUnchanged(record, values) as never, { mergeObjectProperties: false });
   touch(record, scope);
   await em.flush();
   return { outcome: "saved", id };

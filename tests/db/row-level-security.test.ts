@@ -21,6 +21,7 @@ const PROGRAM_TABLES = [
   "wafer_scan",
   "wafer_measurement",
   "job",
+  "step_measurement",
 ];
 const SITE_TABLES = [
   "film",
@@ -37,6 +38,8 @@ const SITE_TABLES = [
   "repeatability_study",
   "reference_wafer",
   "reference_reading",
+  "film_stress_value",
+  "film_stress_in_use",
 ];
 
 let engineer: ActorScope;
@@ -150,7 +153,7 @@ describe("a write", () => {
     expect(touched).toEqual([{ slug: "tern" }]);
   });
 
-  test.each(["assessment", "scan_file", "audit_event"])("never changes or deletes a row of %s", async (table) => {
+  test.each(["assessment", "scan_file", "audit_event", "film_stress_in_use"])("never changes or deletes a row of %s", async (table) => {
     await expect(forgetful(engineer, `update "${table}" set id = id`)).rejects.toThrow(/permission denied/);
     await expect(forgetful(engineer, `delete from "${table}"`)).rejects.toThrow(/permission denied/);
   });

@@ -20,6 +20,7 @@ const PROGRAM_TABLE: Record<keyof typeof PROGRAM_PERMISSIONS, string> = {
   "see released sheets": "y y y y y y",
   "see the work": "       - y y y y -",
   "upload scans": "       - y y y y -",
+  "accept stresses": "    - - - y y -",
   "edit stacks and flows": "- - - y y -",
   "run assessments": "    - - - y y -",
 };

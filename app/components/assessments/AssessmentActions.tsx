@@ -23,6 +23,11 @@ export function AssessmentActions({ head, leg = null, phone = false }: Props) {
           This lot
         </Link>
       )}
+      {phone ? null : (
+        <Link to={`/assessments/${head.id}/measured`} className="btn">
+          Measured
+        </Link>
+      )}
       {mayAssess ? (
         <Link to={`/flows/${head.flow.id}`} className={`btn ${grow}`}>
           Change the flow

@@ -88,6 +88,10 @@ export function AssessmentPage({ view, changed, refused }: Props) {
           <Link to={`/assessments/${head.id}/lot`} className="link">
             try a lot
           </Link>
+          {"; "}
+          <Link to={`/assessments/${head.id}/measured`} className="link">
+            measured after a step
+          </Link>
         </p>
       )}
       <div className="screen-only sticky bottom-0 z-10 -mx-4 mt-4 flex gap-2 border-t border-ink bg-surface px-4 py-2 tablet:hidden">

@@ -43,6 +43,10 @@ export function FilmDetail(props: Props) {
           <Link to={`/assessments/change-request?of=film:${record.id}`} className="link">
             What would change?
           </Link>
+          {" · "}
+          <Link to={`/predictions?of=stress&film=${record.id}`} className="link">
+            Predicted against measured
+          </Link>
         </p>
       )}
     </LibraryDetail>

@@ -60,7 +60,16 @@ export const FILM_LIST: ListView<LibraryRecords["film"]> = {
       key: "source",
       head: "Source of stress",
       sortable: true,
-      cell: ({ stress }) => <SourceMark kind={stress.source} />,
+      cell: ({ stress }) => (
+        <>
+          <SourceMark kind={stress.source} />
+          {stress.meanOf !== undefined && (
+            <span className="block text-label text-quiet">
+              {stress.meanOf === 1 ? "1 accepted value" : `mean of ${stress.meanOf} values`}
+            </span>
+          )}
+        </>
+      ),
     },
   ],
 };

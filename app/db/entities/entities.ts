@@ -6,6 +6,8 @@ import { CarrierUnit } from "./carrier-unit.ts";
 import { Credential } from "./credential.ts";
 import { Equipment } from "./equipment.ts";
 import { Film } from "./film.ts";
+import { FilmStressInUse } from "./film-stress-in-use.ts";
+import { FilmStressValue } from "./film-stress-value.ts";
 import { Flow } from "./flow.ts";
 import { FlowRevision } from "./flow-revision.ts";
 import { FlowStep } from "./flow-step.ts";
@@ -28,6 +30,7 @@ import { Silicon } from "./silicon.ts";
 import { SiteLimit } from "./site-limit.ts";
 import { Stack } from "./stack.ts";
 import { StackLayer } from "./stack-layer.ts";
+import { StepMeasurement } from "./step-measurement.ts";
 import { StepTemplate } from "./step-template.ts";
 import { Tape } from "./tape.ts";
 import { Wafer } from "./wafer.ts";
@@ -64,6 +67,9 @@ export const entities = [
   ReferenceReading,
   ScanFile,
   ScanReading,
+  FilmStressValue,
+  FilmStressInUse,
+  StepMeasurement,
   Lot,
   Wafer,
   WaferScan,

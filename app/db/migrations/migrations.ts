@@ -10,9 +10,11 @@ import { ImportProfiles } from "./2026-12-06-import-profiles.ts";
 import { CarrierPieceVariation } from "./2026-12-06-carrier-piece-variation.ts";
 import { DebondFace } from "./2026-12-06-debond-face.ts";
 import { CarrierExpansionCurve } from "./2026-12-06-carrier-expansion-curve.ts";
+import { FilmStress } from "./2026-12-07-film-stress.ts";
 import { FilmLines } from "./2026-12-06-film-lines.ts";
 import { Jobs } from "./2026-12-06-jobs.ts";
 import { Tapes } from "./2026-12-06-tapes.ts";
+import { StepMeasurements } from "./2026-12-07-step-measurements.ts";
 import { Wafers } from "./2026-12-07-wafers.ts";
 import { Instruments } from "./2026-12-07-instruments.ts";
 
@@ -33,6 +35,8 @@ export const migrations = [
   { name: "2026-12-06-carrier-expansion-curve", class: CarrierExpansionCurve },
   { name: "2026-12-06-tapes", class: Tapes },
   { name: "2026-12-06-jobs", class: Jobs },
+  { name: "2026-12-07-film-stress", class: FilmStress },
   { name: "2026-12-07-wafers", class: Wafers },
   { name: "2026-12-07-instruments", class: Instruments },
+  { name: "2026-12-07-step-measurements", class: StepMeasurements },
 ];

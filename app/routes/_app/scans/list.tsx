@@ -59,6 +59,9 @@ export default function Scans({ loaderData }: Route.ComponentProps) {
             <Link to="/instruments" className="btn">
               Instruments
             </Link>
+            <Link to="/predictions" className="btn">
+              Predicted against measured
+            </Link>
             <Link to="/jobs" className="btn">
               Work under way
             </Link>

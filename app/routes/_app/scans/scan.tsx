@@ -1,4 +1,5 @@
 import { data, redirect } from "react-router";
+import { ScanInHistory } from "#app/components/films/ScanInHistory.tsx";
 import { PageHead } from "#app/components/layout/PageHead.tsx";
 import { ScanView } from "#app/components/scans/ScanView.tsx";
 import { UndoScan } from "#app/components/scans/UndoScan.tsx";
@@ -6,6 +7,7 @@ import { Notice } from "#app/components/ui/Notice.tsx";
 import { scopeOf } from "#app/server/contexts.server.ts";
 import { postedForm } from "#app/server/form.server.ts";
 import { problem } from "#app/server/problem.server.ts";
+import { acceptedAs } from "#app/services/films/accept-scan.server.ts";
 import { getScan } from "#app/services/scans.server.ts";
 import { undoScan } from "#app/services/wafers/undo-import.server.ts";
 import type { Route } from "./+types/scan";
@@ -15,7 +17,9 @@ export const meta: Route.MetaFunction = ({ loaderData }) => [
 ];
 
 export async function loader({ context, params }: Route.LoaderArgs) {
-  return { scan: await getScan(scopeOf(context), params.scanId) };
+  const scope = scopeOf(context);
+  const scan = await getScan(scope, params.scanId);
+  return { scan, accepted: await acceptedAs(scope, scan.id) };
 }
 
 export async function action({ request, context, params }: Route.ActionArgs) {
@@ -29,7 +33,7 @@ export async function action({ request, context, params }: Route.ActionArgs) {
 }
 
 export default function Scan({ loaderData, actionData }: Route.ComponentProps) {
-  const { scan } = loaderData;
+  const { scan, accepted } = loaderData;
   return (
     <>
       <PageHead
@@ -39,6 +43,7 @@ export default function Scan({ loaderData, actionData }: Route.ComponentProps) {
       />
       {actionData?.fault && <Notice kind="error" title={actionData.fault} />}
       <ScanView scan={scan} />
+      <ScanInHistory scanId={scan.id} accepted={accepted} curled={scan.result.curled !== null} />
       <UndoScan scan={scan} />
     </>
   );

@@ -1,0 +1,97 @@
+import { predictedAgainstMeasured, type Parity } from "#app/engine/profile/lot-figures/predicted-against-measured.ts";
+import type { Predicted, PredictionGroup, PredictionPoint } from "#app/schemas/prediction.ts";
+import { PAGE_SIZE, type ListPage, type ListParams } from "./list-params.ts";
+import { csvCell } from "./stack-csv.ts";
+
+/** Names of the columns that the points sort by; the first is the default. */
+export const PREDICTION_SORTS = ["measured", "off", "group", "name", "predicted", "value", "program"] as const;
+
+/** How far a point is off, in standard uncertainties of the difference. */
+export const offBy = ({ predicted, predictedUncertainty, measured, measuredUncertainty }: PredictionPoint): number =>
+  (measured - predicted) / Math.hypot(predictedUncertainty, measuredUncertainty);
+
+const keyOf = (point: PredictionPoint, sort: string): string | number => {
+  switch (sort) {
+    case "off":
+      return Math.abs(offBy(point));
+    case "group":
+      return point.group.toLowerCase();
+    case "name":
+      return point.name.toLowerCase();
+    case "predicted":
+      return point.predicted;
+    case "value":
+      return point.measured;
+    case "program":
+      return point.program;
+    default:
+      return point.measuredAt;
+  }
+};
+
+/** The points that a search leaves, in the order that is asked for. */
+export function chosenPoints(points: readonly PredictionPoint[], params: ListParams): PredictionPoint[] {
+  const query = params.query.toLowerCase();
+  const direction = params.descending ? -1 : 1;
+  return points
+    .filter(({ name, group, instrument }) => [name, group, instrument].join("\n").toLowerCase().includes(query))
+    .toSorted((a, b) => {
+      const [left, right] = [keyOf(a, params.sort), keyOf(b, params.sort)];
+      return (left < right ? -direction : left > right ? direction : 0) || a.id.localeCompare(b.id);
+    });
+}
+
+export function pageOfPoints(points: readonly PredictionPoint[], params: ListParams): ListPage<PredictionPoint> {
+  const from = (params.page - 1) * PAGE_SIZE;
+  return { rows: points.slice(from, from + PAGE_SIZE), total: points.length, params };
+}
+
+/** What the model is off by, over all points and for each step or film; those that it is off at first. */
+export function compared(
+  points: readonly PredictionPoint[],
+): { all: PredictionGroup; groups: PredictionGroup[] } | null {
+  if (points.length === 0) return null;
+  const { all, steps } = predictedAgainstMeasured(points.map(({ group, ...point }) => ({ step: group, ...point })));
+  const groups = steps
+    .map(withOff)
+    .toSorted((a, b) => Number(b.isOff) - Number(a.isOff) || b.agreement - a.agreement || a.step.localeCompare(b.step));
+  return { all: withOff(all), groups };
+}
+
+const withOff = (parity: Parity): PredictionGroup => ({ ...parity, isOff: parity.off.length > 0 });
+
+const UNITS: Record<Predicted, { unit: string; perSi: number }> = {
+  bow: { unit: "um", perSi: 1e6 },
+  stress: { unit: "MPa", perSi: 1e-6 },
+};
+
+/** Points as CSV with a point as decimal mark; uncertainties are standard ones. */
+export function predictionsCsv(of: Predicted, points: readonly PredictionPoint[]): string {
+  const { unit, perSi } = UNITS[of];
+  const head = [
+    of === "bow" ? "step" : "film",
+    of === "bow" ? "lot_wafer" : "wafer",
+    "program",
+    "measured_on",
+    "instrument",
+    `predicted_${unit}`,
+    `predicted_standard_uncertainty_${unit}`,
+    `measured_${unit}`,
+    `measured_standard_uncertainty_${unit}`,
+    "measured_uncertainty_stated",
+  ];
+  const scaled = (value: number) => Number((value * perSi).toPrecision(12));
+  const rows = points.map((point) => [
+    point.group,
+    point.name,
+    point.program,
+    point.measuredAt.slice(0, 10),
+    point.instrument,
+    scaled(point.predicted),
+    scaled(point.predictedUncertainty),
+    scaled(point.measured),
+    scaled(point.measuredUncertainty),
+    point.stated ? "yes" : "no",
+  ]);
+  return [head, ...rows].map((cells) => `${cells.map(csvCell).join(",")}\r\n`).join("");
+}

@@ -1,0 +1,155 @@
+import { readFileSync } from "node:fs";
+import type { Page } from "@playwright/test";
+import { expect, expectNoAxeFindings, signIn, test } from "./support.ts";
+import { assessTern } from "./assess.ts";
+
+const fixture = (name: string) => ({
+  name,
+  mimeType: "text/csv",
+  buffer: readFileSync(new URL(`../../fixtures/scans/${name}`, import.meta.url)),
+});
+
+const unique = (prefix: string) => `${prefix}-${Math.random().toString(36).slice(2, 10)}`;
+
+/** Adds a film of this test alone, so that no other test counts on its stress; returns its address. */
+async function addFilm(page: Page, baseURL: string): Promise<string> {
+  const answer = await page.request.post("/films/new", {
+    headers: { Origin: baseURL },
+    maxRedirects: 0,
+    form: {
+      name: unique("Test nitride"),
+      kind: "inorganic",
+      "stress.value": "30 MPa",
+      "stress.tolerance": "3 MPa",
+      "stress.source": "assumed",
+      "youngsModulus.value": "160 GPa",
+      "youngsModulus.source": "assumed",
+      "poissonsRatio.value": "0.25",
+      "poissonsRatio.source": "assumed",
+      "expansion.value": "2.3 ppm/K",
+      "expansion.source": "assumed",
+    },
+  });
+  expect(answer.status()).toBe(302);
+  return answer.headers()["location"] ?? "";
+}
+
+/** Uploads the fixture pair as a scan of a film; returns its address. */
+async function addScan(page: Page, baseURL: string, film: string): Promise<string> {
+  await page.goto("/scans/new");
+  const program = await page.getByLabel("Program").locator("option", { hasText: "Tern" }).getAttribute("value");
+  const answer = await page.request.post("/scans/new", {
+    headers: { Origin: baseURL },
+    maxRedirects: 0,
+    multipart: {
+      program: program ?? "",
+      label: unique("M"),
+      film: film.split("/").at(-1) ?? "",
+      orientation: "100",
+      filmThickness: "5 um",
+      siliconThickness: "725 um",
+      diameter: "200 mm",
+      edgeExclusion: "5 mm",
+      positionUnit: "mm",
+      heightUnit: "µm",
+      decimalMark: "point",
+      before: fixture("monitor-200mm-725um-before-film-seed-7.csv"),
+      after: fixture("monitor-200mm-725um-after-5um-film-31MPa-seed-7.csv"),
+    },
+  });
+  expect(answer.status()).toBe(302);
+  return answer.headers()["location"] ?? "";
+}
+
+test.describe("a film's history", () => {
+  test("begins with a scan that an engineer accepts, whose mean is then put into use and set aside again", async ({
+    page,
+    baseURL,
+  }) => {
+    await signIn(page, "engineer");
+    const film = await addFilm(page, baseURL ?? "");
+    const scan = await addScan(page, baseURL ?? "", film);
+    await page.goto(scan);
+    await page.getByRole("link", { name: "Accept into the history" }).click();
+    await expect(page.getByText("What becomes of the value in use")).toBeVisible();
+    await expectNoAxeFindings(page);
+    await page.getByLabel("Why this value may stand for the film").fill("Standard monitor");
+    await page.getByLabel("Instrument").fill("Laser profiler 2");
+    await page.getByRole("button", { name: "Accept into the history" }).click();
+
+    await expect(page).toHaveURL(/\/films\/.*#history/);
+    await expect(page.getByText(/^Mean of the accepted values: \+3\d\.\d+/)).toBeVisible();
+    await expect(page.getByText("Laser profiler 2").first()).toBeVisible();
+    await page.getByRole("button", { name: "Use the accepted value" }).click();
+    await expect(page.getByText(/^In use: the mean of the accepted values/)).toBeVisible();
+    await expect(page.getByRole("region", { name: "Stresses in use", exact: true }).getByRole("row")).toHaveCount(3);
+    await expectNoAxeFindings(page);
+
+    await page.getByText("Set aside", { exact: true }).click();
+    await page.getByLabel("Why it does not count").fill("Dirty chuck");
+    await page.getByRole("button", { name: /^Set aside: value of/ }).click();
+    await expect(page.getByRole("alert")).toContainText("last one that counts");
+    await page.goto("/films");
+    await page.goto(scan);
+    await expect(page.getByText(/Accepted into the history of/)).toBeVisible();
+  });
+
+  test("is read by a technician, who is told who may accept", async ({ page, baseURL }) => {
+    await signIn(page, "engineer");
+    const film = await addFilm(page, baseURL ?? "");
+    const scan = await addScan(page, baseURL ?? "", film);
+    await page.context().clearCookies();
+    await signIn(page, "technician");
+    await page.goto(scan);
+    await expect(page.getByText("An engineer or process owner of the program may accept it.")).toBeVisible();
+    await expect(page.getByRole("link", { name: "Accept into the history" })).toHaveCount(0);
+    await page.goto(film);
+    await expect(page.getByText(/No measured stress has been accepted yet/)).toBeVisible();
+    await expect(page.getByText("Add a value measured elsewhere")).toHaveCount(0);
+  });
+});
+
+test.describe("without scripts", () => {
+  test.use({ javaScriptEnabled: false, refusals: true });
+
+  test("a scan is accepted, and what is missing is said at its field", async ({ page, baseURL }) => {
+    await signIn(page, "engineer");
+    const film = await addFilm(page, baseURL ?? "");
+    const scan = await addScan(page, baseURL ?? "", film);
+    await page.goto(`${scan}/accept`);
+    await page.getByRole("button", { name: "Accept into the history" }).click();
+    await expect(page.getByText("Say why this value may stand for the film.")).toBeVisible();
+    await page.getByLabel("Why this value may stand for the film").fill("Standard monitor");
+    await page.getByLabel("From now on the film uses the mean").check();
+    await page.getByRole("button", { name: "Accept into the history" }).click();
+    await expect(page.getByText(/^In use: the mean of the accepted values/)).toBeVisible();
+    await page.goto(`${scan}/accept`);
+    await expect(page.getByText(/was accepted into the film’s history already/)).toBeVisible();
+  });
+});
+
+test("bows after a step are recorded and stand in the parity plot, read out by keyboard", async ({ page }) => {
+  await signIn(page, "engineer");
+  await assessTern(page);
+  await page.getByRole("link", { name: "Measured", exact: true }).click();
+  const lot = unique("K");
+  await page.getByLabel("Measured after").selectOption({ index: 1 });
+  await page.getByLabel("Wafers one by one").fill("slot, bow\n1, -60\n2, -62");
+  await page.getByLabel("Lot", { exact: true }).fill(lot);
+  await page.getByLabel("Measured on").fill("2026-11-20");
+  await page.getByLabel("Measured", { exact: true }).selectOption("device");
+  await page.getByLabel("Weight of the wafer").selectOption("compensated");
+  await page.getByRole("button", { name: "Record" }).click();
+  await expect(page.getByRole("row").filter({ hasText: `${lot}, slot 2` })).toBeVisible();
+  await expectNoAxeFindings(page);
+
+  await page.goto(`/predictions?of=bow&q=${lot}`);
+  const reader = page.getByLabel("Read point by point");
+  await reader.focus();
+  await page.keyboard.press("End");
+  await expect(reader).toHaveAttribute("aria-valuetext", /predicted .* measured /);
+  await expect(page.getByRole("region", { name: "Points" }).getByRole("row")).toHaveCount(3);
+  await expectNoAxeFindings(page);
+  const csv = await page.request.get(`/predictions/points.csv?of=bow&q=${lot}`);
+  expect((await csv.text()).trim().split("\r\n")).toHaveLength(3);
+});
