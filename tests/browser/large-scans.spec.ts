@@ -46,6 +46,7 @@ test.describe("a pair beyond a megabyte", () => {
     await expect(page.getByText("every point of it is fitted")).toBeVisible();
     await expectNoAxeFindings(page);
     await job.getByRole("link", { name: "Open the scan" }).click();
+    await page.waitForURL(/\/scans\/[0-9a-f-]{36}$/, { timeout: 15_000 });
     await expect(page.getByRole("heading", { level: 1, name: label })).toBeVisible();
     await expect(page.getByText("60000 of 60000 rows read").first()).toBeVisible();
     await expect(page.getByText("The fit was given every point").first()).toBeVisible();
