@@ -1,45 +1,17 @@
-import { readFileSync } from "node:fs";
+import { readFileSync, truncateSync, writeFileSync } from "node:fs";
 import { fileURLToPath } from "node:url";
-import type { Page } from "@playwright/test";
+import { below, fileAfter, fileBefore, fillForm, ownLabel, readAndKeep } from "./scan-form.ts";
 import { expect, expectNoAxeFindings, signIn, test } from "./support.ts";
 
 const fixture = (name: string) => fileURLToPath(new URL(`../../fixtures/scans/${name}`, import.meta.url));
 const BEFORE = fixture("monitor-200mm-725um-before-film-seed-7.csv");
 const AFTER = fixture("monitor-200mm-725um-after-5um-film-31MPa-seed-7.csv");
 
-/** A wafer of this test alone, so that no test counts on another's data. */
-const ownLabel = () => `M-${Math.random().toString(36).slice(2, 10)}`;
-
 const csv = (name: string, content: string | Buffer) => ({
   name,
   mimeType: "text/csv",
   buffer: Buffer.from(content),
 });
-
-const fileBefore = (page: Page) => page.getByLabel("File before the film");
-const fileAfter = (page: Page) => page.getByLabel("File after the film");
-const readAndKeep = (page: Page) => page.getByRole("button", { name: "Read and keep" }).click();
-
-/** Fills in everything but the two files. */
-async function fillForm(page: Page, label: string): Promise<void> {
-  await page.goto("/scans/new");
-  await page.getByLabel("Wafer", { exact: true }).fill(label);
-  await page.getByLabel("Program").selectOption({ label: "Tern" });
-  await page.getByLabel("Film, to compare with the library").selectOption({ label: "Polymer dielectric A" });
-  await page.getByLabel("Film thickness").fill("5 um");
-  await page.getByLabel("Silicon thickness").fill("725 um");
-  for (const tolerance of await page.getByLabel("Tolerance, ±").all()) await tolerance.fill("0.05 um");
-  await page.getByLabel("Diameter").fill("200 mm");
-  await page.getByLabel("Unit of position").selectOption("mm");
-  await page.getByLabel("Unit of height").selectOption("µm");
-  await page.getByLabel("Decimal mark in the files").selectOption("point");
-}
-
-/** What stands below a field: its error or its hint. */
-const below = async (page: Page, label: string) => {
-  const id = await page.getByLabel(label).getAttribute("aria-describedby");
-  return page.locator(`[id="${id}"]`);
-};
 
 test.describe("a technician", () => {
   test.beforeEach(({ page }) => signIn(page, "technician"));
@@ -184,11 +156,14 @@ test.describe("what is refused", () => {
       await expect(page.getByRole("heading", { name: "No scan fits" })).toBeVisible();
     });
 
-  test("a file that is too large is turned down as soon as it is chosen", async ({ page }) => {
+  test("a file that is too large is turned down as soon as it is chosen", async ({ page }, testInfo) => {
+    const large = testInfo.outputPath("large.csv");
+    writeFileSync(large, "1.5,2.5\n");
+    truncateSync(large, 49 * 1024 * 1024);
     await fillForm(page, ownLabel());
-    await fileBefore(page).setInputFiles(csv("large.csv", Buffer.alloc(9 * 1024 * 1024, "1.5,2.5\n")));
+    await fileBefore(page).setInputFiles(large);
     await expect(await below(page, "File before the film")).toContainText(
-      /large\.csv has 9\.0.MB; a file may have up to 8.MB/,
+      /large\.csv has 49\.0.MB; a file may have up to 48.MB/,
     );
   });
 });

@@ -38,7 +38,7 @@ describe("a batch", () => {
   });
 
   it("refuses a file that is too large without reading it", () => {
-    const batch = changedBatch(EMPTY_BATCH, { kind: "add", files: [file("large.csv", 9 * 1024 * 1024)] });
+    const batch = changedBatch(EMPTY_BATCH, { kind: "add", files: [file("large.csv", 49 * 1024 * 1024)] });
     expect(first(batch)).toMatchObject({ done: null, told: { outcome: "refused" } });
   });
 

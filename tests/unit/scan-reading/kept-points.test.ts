@@ -52,7 +52,7 @@ describe("profiles that are kept whole", () => {
   });
 
   it("take none of the file's own words into their CSV, so none that a spreadsheet would run", () => {
-    const kept = figures(fileOf([noisy(40)], ['"=cmd|\' /C calc\'!A0 x (mm)",@SUM(A1) z (µm)']));
+    const kept = figures(fileOf([noisy(40)], ["\"=cmd|' /C calc'!A0 x (mm)\",@SUM(A1) z (µm)"]));
     const cells = profilesCsv(kept).split(/[,\r\n]+/);
     expect(cells.filter((cell) => /^[=+@\t]|^-(?!\d)/.test(cell))).toEqual([]);
   });

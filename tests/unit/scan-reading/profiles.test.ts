@@ -212,6 +212,65 @@ describe("the same scan, written in different ways", () => {
   });
 });
 
+describe("units by other names", () => {
+  it.each([
+    ["um", "µm"],
+    ["\u03BCm", "µm"],
+    ["micron", "µm"],
+    ["microns", "µm"],
+    ["Angstrom", "Å"],
+    ["\u212B", "Å"],
+    ["in", "inch"],
+    ["inches", "inch"],
+    ["mils", "mil"],
+    ["millimeter", "mm"],
+  ] as const)("'%s' is %s, in a head and in a row of its own", (name, unit) => {
+    for (const lines of [[`x (${name});z (${name})`], ["x;z", `${name};${name}`]]) {
+      const file = scanFile(SCAN, {
+        delimiter: ";",
+        positionUnit: unit,
+        heightUnit: unit,
+        positionDecimals: 5,
+        heightDecimals: 7,
+        lines,
+      });
+      const { reading, content } = profilesOf(readScanFile(file.bytes, "M-0388.csv"));
+      expect(reading.columns.map((column) => column.unit)).toEqual([unit, unit]);
+      content.profiles.forEach((found) => expectTruth(found, SCAN, file));
+    }
+  });
+});
+
+describe("all of it at once", () => {
+  const scan = trueScan({ uneven: true }).reverse();
+  const style: Partial<FileStyle> = {
+    delimiter: ";",
+    decimalComma: true,
+    power: "D",
+    positionDecimals: 6,
+    heightDecimals: 6,
+    counted: true,
+    lineEnd: "\r\n",
+    lines: ["sep=;", "Stylus, recipe 12", "Date: 2026-03-04", "", "No;Position;Höhe", ";mm;nm"],
+    heightUnit: "nm",
+    footer: ["", "End of scan", "Mean;;12,5"],
+    instead: { 12: { height: "NaN" }, 40: { position: "" }, 41: { height: "---" } },
+  };
+
+  it.each(["utf-8 with mark", "utf-16le with mark", "utf-16be with mark", "windows-1252"] as const)(
+    "in %s: the values that are there are the true ones, the others are counted",
+    (encoding) => {
+      const file = scanFile(scan, { ...style, encoding });
+      const { reading, content } = profilesOf(readScanFile(file.bytes, "M-0388.csv"));
+      expect(reading).toMatchObject({ delimiterNamed: true, headerRow: 5, unitsRow: 6, decimalMark: "comma" });
+      expect(content.faulty).toBe(3);
+      expect(content.footer?.lines).toBe(2);
+      const kept = scan.filter((_, n) => ![12, 40, 41].includes(n));
+      content.profiles.forEach((found) => expectTruth(found, kept, file));
+    },
+  );
+});
+
 describe("several profiles in one file", () => {
   const after = trueScan({ times: 2, count: 60 });
   const pairsOf = (lines: string[], scans: TruePoint[][]) =>
