@@ -20,6 +20,8 @@ export const WALLED: readonly string[] = [
   "readingId",
   "jobId",
   "waferId",
+  "waferScanId",
+  "lotId",
 ];
 
 type Query = <Row>(sql: string, params?: unknown[]) => Promise<Row[]>;
@@ -102,7 +104,39 @@ export async function ternIds(engineer: APIRequestContext): Promise<DoorIds> {
     multipart: { program: "tern", file: fixture("monitor-200mm-725um-before-film-seed-7.csv") },
   });
   const jobId = await added("/api/v1/scans", { multipart: { program: "tern", file: longProfile("door.csv", 60_000) } });
-  return { ...known, assessmentId, scanId, fileId, readingId, jobId, kind: "carriers", "*": "nowhere/at/all" };
+  const answer = await engineer.post("/scans/import/file", {
+    multipart: {
+      program: known.program,
+      wafer: "M-door",
+      lot: "L-door",
+      side: "before",
+      lines: "[[0,0]]",
+      profile: "{}",
+      orientation: "100",
+      diameter: "200 mm",
+      edgeExclusion: "5 mm",
+      file: fixture("monitor-200mm-725um-before-film-seed-7.csv"),
+    },
+  });
+  if (!answer.ok()) throw new Error(`A file was not imported: ${await answer.text()}`);
+  const placed = await asOwner(async (query) => ({
+    waferScanId: await idOf(
+      query,
+      "select s.id from wafer_scan s join wafer w on w.id = s.wafer_id where w.name = 'M-door' order by s.created_at limit 1",
+    ),
+    lotId: await idOf(query, "select id from lot where name = 'L-door'"),
+  }));
+  return {
+    ...known,
+    ...placed,
+    assessmentId,
+    scanId,
+    fileId,
+    readingId,
+    jobId,
+    kind: "carriers",
+    "*": "nowhere/at/all",
+  };
 }
 
 /** Copies of the same rows in a program of their own, to which nobody belongs. */
@@ -125,6 +159,14 @@ export function strangeIds(own: DoorIds): Promise<DoorIds> {
       );
     const flowId = await copy("flow", own["flowId"]);
     const fileId = await copy("scan_file", own["fileId"]);
+    const readingId = await copy("scan_reading", own["readingId"], { file_id: fileId });
+    const lotId = await copy("lot", own["lotId"]);
+    const wafer = await idOf(
+      query,
+      `insert into wafer (id, program_id, lot_id, name, created_at, created_by_id)
+         select gen_random_uuid(), program_id, id, 'M-door', created_at, created_by_id from lot where id = ? returning id`,
+      [lotId],
+    );
     return {
       ...own,
       flowId,
@@ -132,7 +174,9 @@ export function strangeIds(own: DoorIds): Promise<DoorIds> {
       stepId: await copy("flow_step", own["stepId"], { flow_id: flowId }),
       assessmentId: await copy("assessment", own["assessmentId"], { flow_id: flowId }),
       stackId: await copy("stack", own["stackId"]),
-      readingId: await copy("scan_reading", own["readingId"], { file_id: fileId }),
+      readingId,
+      lotId,
+      waferScanId: await copy("wafer_scan", own["waferScanId"], { wafer_id: wafer, reading_id: readingId }),
       jobId: await copy("job", own["jobId"]),
       waferId: await copy("wafer", own["waferId"], { lot_id: null }),
       scanId: await copy("scan", own["scanId"], { before_id: fileId, after_id: fileId }),

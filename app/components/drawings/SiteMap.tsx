@@ -14,18 +14,21 @@ interface Props {
   radius: number;
   /** what the drawing shows, in words */
   label: string;
+  /** what the legend counts in, and how it writes a value */
+  unit: string;
   format: (value: number) => string;
 }
 
 const CLASSES = 5;
-const BOX = { side: 220, legend: 92 };
+const BOX = { side: 220, legend: 130 };
+const ROW = 20;
 const WAFER = 100;
 
 /**
  * Values of sites on a wafer, x to the right and y upwards, in classes of equal width. A class is told by the size of its dot as well as by its shade, so
  * that a grey print reads the same.
  */
-export function SiteMap({ sites, radius, label, format }: Props) {
+export function SiteMap({ sites, radius, label, unit, format }: Props) {
   const values = sites.map(({ value }) => value);
   const [least, most] = [Math.min(...values), Math.max(...values)];
   const step = (most - least) / CLASSES;
@@ -45,17 +48,17 @@ export function SiteMap({ sites, radius, label, format }: Props) {
       {sites.map(({ x, y, value }, n) => (
         <Dot key={n} x={centre + at(x)} y={centre - at(y)} level={classOf(value)} />
       ))}
+      <text x={BOX.side + 6} y={24} fill={colour("quiet")}>
+        {unit}
+      </text>
       {shown.map((level, row) => (
         <g key={level}>
-          <Dot x={BOX.side + 12} y={24 + 20 * row} level={level} />
-          <text x={BOX.side + 24} y={28 + 20 * row} fill={colour("ink")}>
-            {step === 0 ? format(least) : `from ${format(least + level * step)}`}
+          <Dot x={BOX.side + 12} y={42 + ROW * row} level={level} />
+          <text x={BOX.side + 24} y={46 + ROW * row} fill={colour("ink")}>
+            {step === 0 ? format(least) : `${format(least + level * step)} to ${format(least + (level + 1) * step)}`}
           </text>
         </g>
       ))}
-      <text x={BOX.side + 6} y={24 + 20 * shown.length + 4} fill={colour("quiet")}>
-        {step === 0 ? "" : `up to ${format(most)}`}
-      </text>
     </svg>
   );
 }

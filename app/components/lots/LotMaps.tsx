@@ -1,5 +1,6 @@
 import { thicknessFigures } from "#app/engine/profile/map/thickness-sites.ts";
 import { formatQuantity } from "#app/engine/units/format.ts";
+import { withoutUnit } from "#app/lib/format-measured.ts";
 import { underneathWords } from "#app/lib/wafer-figures.ts";
 import type { WaferMap } from "#app/schemas/lot-view.ts";
 import { SiteMap } from "../drawings/SiteMap.tsx";
@@ -24,7 +25,8 @@ export function LotMaps({ maps, diameter }: { maps: readonly WaferMap[]; diamete
                 sites={sites.map(({ x: at, y: up, thickness }) => ({ x: at, y: up, value: thickness }))}
                 radius={diameter / 2}
                 label={`Thickness of ${wafer.name} at ${sites.length} sites: ${µm(mean)} on average, TTV ${µm(ttv)}`}
-                format={µm}
+                unit="µm"
+                format={(metres) => withoutUnit(µm(metres))}
               />
               <p className="mt-2 font-semibold">
                 {wafer.name}

@@ -36,8 +36,8 @@ export function LotWafers({ wafers }: { wafers: readonly LotWafer[] }) {
               {WAFER_FIGURES.map((name) => (
                 <th key={name} scope="col" className="num min-w-24">
                   {HEADS[name].head}
-                  <span className="block">{`${HEADS[name].unit}${name === "stress" ? ", k = 2 where ± stands" : ""}`}</span>
-                  {ways[name] && <span className="block max-w-48 text-quiet ml-auto">{ways[name]}</span>}
+                  <span className="block">{HEADS[name].unit}</span>
+                  {ways[name] && <span className="ml-auto block max-w-44 whitespace-normal">{ways[name]}</span>}
                 </th>
               ))}
               <th scope="col" className="num">
@@ -69,7 +69,8 @@ export function LotWafers({ wafers }: { wafers: readonly LotWafer[] }) {
         </table>
       </div>
       <p className="mt-2 text-label text-quiet">
-        Bow as its tool gives it: with the device side up, centre above the reference plane is positive.
+        Bow as its tool gives it: with the device side up, centre above the reference plane is positive. Uncertainties
+        are expanded, k = 2; where no ± stands, the tool gave none.
       </p>
     </>
   );

@@ -16,7 +16,7 @@ export function ScanInputs({ parameters, placed }: { parameters: ScanParameters;
     ["Diameter", mm(parameters.diameter)],
     ["Orientation", `(${parameters.orientation})`],
     ["Rim left out", mm(parameters.edgeExclusion)],
-    ...(placed?.azimuth == null ? [] : [["Azimuth from the notch", azimuthText(placed.azimuth)]]),
+    ...(typeof placed?.azimuth === "number" ? [["Azimuth from the notch", azimuthText(placed.azimuth)]] : []),
     ...(placed ? [["Instrument", placed.instrument || "not named"]] : []),
   ];
   return (

@@ -17,7 +17,8 @@ const NAMED = {
 /** A name as wafers have it: letters, then figures. */
 const WAFER = /(?:^|[ ])([a-z]{1,4}-?\d{2,}[a-z0-9-]*)(?= |$)/i;
 /** Words that say nothing of the wafer. */
-const SAYING_NOTHING = /(?:^|[ ])(?:film|scan|profile|wafer|copy|az|the)(?= |$)/gi;
+const SAYING_NOTHING =
+  /(?:^|[ ])(?:film|scan|profile|wafer|copy|az|the|lot|map|summary|figures|thickness|stress|table)(?= |$)/gi;
 
 /**
  * What the name of a file says its scan is of: a proposal for a person to look at, never more.

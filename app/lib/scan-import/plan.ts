@@ -1,4 +1,5 @@
 import { pairScans } from "#app/engine/profile/orient-scan.ts";
+import { blankMessage } from "#app/lib/read-quantity.ts";
 import type { BatchFile } from "./batch.ts";
 import { kindOf, lineWords, linesOf, takenLines, waferWords } from "./place-words.ts";
 
@@ -38,6 +39,19 @@ export function batchPlan(files: readonly BatchFile[]): BatchPlan {
       return after ? pairItem(file, after) : soleItem(file);
     });
   return { items, staying };
+}
+
+const THICKNESSES = { filmThickness: "film thickness", siliconThickness: "silicon thickness" };
+
+/** What the pairs of a batch need of its shared fields and do not find there, by field; null when nothing is missing. */
+export function missingOfPairs(items: readonly PlannedItem[], shared: FormData): Record<string, string[]> | null {
+  if (items.every(({ files }) => files.length < 2)) return null;
+  const missing = Object.entries(THICKNESSES).flatMap(([field, words]) => {
+    const typed = shared.get(field);
+    const isTyped = typeof typed === "string" && typed.trim() !== "";
+    return isTyped ? [] : [{ field, said: [blankMessage({ label: words })] }];
+  });
+  return missing.length === 0 ? null : Object.fromEntries(missing.map(({ field, said }) => [field, said]));
 }
 
 const pairItem = (before: BatchFile, after: BatchFile): PlannedItem => ({

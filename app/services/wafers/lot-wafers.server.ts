@@ -63,7 +63,7 @@ const dayOf = ({ measuredAt, createdAt }: { measuredAt?: Date | null; createdAt:
 function stressOf(scan: Scan): DatedStress[] {
   if (scan.curled) return [];
   const { stress, stressUncertainty, azimuth } = scan;
-  const line = azimuth == null ? "" : ` along ${azimuthText(azimuth)}`;
+  const line = azimuth === null || azimuth === undefined ? "" : ` along ${azimuthText(azimuth)}`;
   return [{ stress, stressUncertainty, on: scan.createdAt.toISOString().slice(0, 10), how: `from scans${line}` }];
 }
 

@@ -46,7 +46,7 @@ export async function undoScan(
       const { wafer, beforeScan, afterScan } = scan;
       em.remove(scan);
       await em.flush();
-      const halves = [beforeScan, afterScan].filter((half) => half != null);
+      const halves = [beforeScan, afterScan].filter((half) => half !== null && half !== undefined);
       if (placed === "wait again" && halves.length > 0)
         return undone("The scan is undone. Its two files wait for a partner again.");
       for (const half of halves) await leave(em, half);

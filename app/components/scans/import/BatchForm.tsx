@@ -12,6 +12,8 @@ interface Props {
   films: Choice[];
   /** nothing of the batch is a profile: the program is all that counts */
   onlyTables: boolean;
+  /** something of the batch is in already */
+  begun: boolean;
   /** what the server found wrong, by field */
   lastResult: SubmissionResult<string[]> | null;
   onImport: (shared: FormData) => void;
@@ -20,7 +22,7 @@ interface Props {
 type Shared = Omit<ScanFormValues, "label" | "before" | "after" | "positionUnit" | "heightUnit" | "decimalMark">;
 
 /** What all files of a batch share. Thicknesses are asked for when two scans meet, so that a first one can wait without them. */
-export function BatchForm({ id, programs, films, onlyTables, lastResult, onImport }: Props) {
+export function BatchForm({ id, programs, films, onlyTables, begun, lastResult, onImport }: Props) {
   const [only] = programs.length === 1 ? programs : [];
   const [form, fields] = useRecordForm<Shared>({
     id,
@@ -36,7 +38,7 @@ export function BatchForm({ id, programs, films, onlyTables, lastResult, onImpor
         onImport(new FormData(event.currentTarget));
       }}
     >
-      <FormHead lastResult={lastResult} />
+      <FormHead lastResult={lastResult} stands={begun ? "What is in already stays in" : undefined} />
       <h2 className="mb-3 font-semibold">The same for all files of this batch</h2>
       <div className="grid gap-x-3 gap-y-2 tablet:grid-cols-2 wide:grid-cols-4">
         {onlyTables ? (

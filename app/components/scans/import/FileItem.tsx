@@ -4,7 +4,7 @@ import { count } from "#app/components/ui/RunProgress.tsx";
 import { fileSize } from "#app/lib/file-size.ts";
 import type { BatchChange, BatchFile } from "#app/lib/scan-import/batch.ts";
 import { guessFromName } from "#app/lib/scan-import/name-guess.ts";
-import { kindOf, lineWords } from "#app/lib/scan-import/place-words.ts";
+import { kindOf, linesOf, lineWords, waferWords } from "#app/lib/scan-import/place-words.ts";
 import type { Told } from "#app/lib/scan-import/told.ts";
 import type { ImportProfile } from "#app/schemas/import-profile.ts";
 import { FileColumns } from "./FileColumns.tsx";
@@ -27,14 +27,13 @@ const MOST_TRACES = 6;
 
 /** One file of a batch: how it stands in a line, and below it, unfolded, all that is known of it and can be changed. */
 export function FileItem({ file, known, others, change }: Props) {
-  const { key, file: raw, told, of } = file;
+  const { key, file: raw, told } = file;
   const bodyId = useId();
   const heading = useRef<HTMLButtonElement>(null);
   // A question unfolds its file; from then on folding is left to the person.
   const [unfolded, setUnfolded] = useState<boolean | null>(null);
   const open = unfolded ?? told?.outcome === "question";
-  const placed =
-    kindOf(file) === "profiles" ? `${lineWords(of)}${of.side === "" ? "" : `, ${of.side} the film`}` : kindOf(file);
+  const placed = placeWords(file);
   return (
     <li className="border-t border-line py-2 first:border-0">
       <h3>
@@ -51,7 +50,7 @@ export function FileItem({ file, known, others, change }: Props) {
             <span className="font-semibold wrap-anywhere">{raw.name}</span>{" "}
             <span className="text-quiet">
               {fileSize(raw.size)}
-              {`; ${placed}`}
+              {placed === "" ? "" : `; ${placed}`}
             </span>
           </span>
         </button>
@@ -86,6 +85,15 @@ function Fold({ open }: { open: boolean }) {
       <path d={open ? "M0 2H10L5 9Z" : "M2 0V10L9 5Z"} fill="currentColor" />
     </svg>
   );
+}
+
+/** What a file is of, as far as that is known: of a table its kind. */
+function placeWords(file: BatchFile): string {
+  const kind = kindOf(file);
+  if (kind !== "profiles") return kind;
+  const { of } = file;
+  const line = waferWords(of) === "" ? [] : [linesOf(file).length > 1 ? waferWords(of) : lineWords(of)];
+  return [...line, ...(of.side === "" ? [] : [`${of.side} the film`])].join(", ");
 }
 
 /** How a file stands: being read, read, asked about or refused. */

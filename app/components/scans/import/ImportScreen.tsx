@@ -68,6 +68,7 @@ export function ImportScreen({ programs, films, profiles }: Props) {
             programs={programs}
             films={films}
             onlyTables={onlyTables}
+            begun={results.length > 0}
             lastResult={lastResult}
             onImport={(shared) => {
               if (sending === null && ready > 0) void send(plan.items, shared);

@@ -1,6 +1,6 @@
 import { useState } from "react";
 import type { BatchFile } from "#app/lib/scan-import/batch.ts";
-import type { PlannedItem } from "#app/lib/scan-import/plan.ts";
+import { missingOfPairs, type PlannedItem } from "#app/lib/scan-import/plan.ts";
 import { sendFile } from "#app/lib/scan-import/send-file.ts";
 import { addedResults, type ImportResult } from "#app/lib/scan-import/results.ts";
 import type { FileAnswer } from "#app/schemas/scan-import.ts";
@@ -20,9 +20,11 @@ export function useImport(leave: (keys: string[]) => void) {
   const [finished, setFinished] = useState<{ kept: number; refused: number } | null>(null);
 
   const send = async (items: readonly PlannedItem[], shared: FormData) => {
-    setErrors(null);
+    const missing = missingOfPairs(items, shared);
+    setErrors(missing);
     setFinished(null);
     setRefused(new Map());
+    if (missing) return;
     const files = items.flatMap((item) => item.files);
     const outcome = { kept: 0, refused: 0 };
     for (const [n, file] of files.entries()) {

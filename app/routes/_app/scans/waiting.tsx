@@ -54,7 +54,7 @@ export default function Waiting({ loaderData }: Route.ComponentProps) {
         remark={searched ? `${page.total} found` : page.total === 1 ? "1 file" : `${page.total} files`}
         actions={!empty && importing}
       />
-      <ListHead what="wafers, lots, files, instruments and people" filters={filters} />
+      <ListHead what="wafers, lots, files and people" filters={filters} />
       {page.rows.length > 0 ? (
         <DataTable
           caption="Files that wait for their partner"
