@@ -121,7 +121,7 @@ export interface FilmAnalysis {
   /** of the change by the film, of the wafer before it and after it */
   directions: { change: Directions; before: Directions; after: Directions };
   /** why there is no surface, or the shapes */
-  shape: { why: string } | { shapes: ShapeView[] };
+  shape: { why: string } | { shapes: ShapeView[]; remarks: string[] };
   gravity: string;
   mistakes: MistakeView[];
   /** in the order of the page, each with what it belongs to */

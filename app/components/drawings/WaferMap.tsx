@@ -1,3 +1,4 @@
+import { useId } from "react";
 import type { MapView } from "#app/schemas/film-analysis.ts";
 import { colour } from "./colour.ts";
 import { coordinate } from "./coordinate.ts";
@@ -17,8 +18,8 @@ export interface WaferMapProps {
 /** The wafer's radius in the unit of the map's paths. */
 const R = 1000;
 const NOTCH = 26;
-const MARGIN = 130;
-const TEXT = 46;
+const MARGIN = 170;
+const TEXT = 66;
 
 /** Heavy line at every fifth level. */
 const HEAVY = 5;
@@ -29,6 +30,7 @@ const HEAVY = 5;
  */
 export function WaferMap({ map, label, azimuths, axis }: WaferMapProps) {
   const size = 2 * (R + MARGIN);
+  const id = useId();
   return (
     <div className="flex flex-wrap items-center gap-x-6 gap-y-3">
       <svg
@@ -37,9 +39,14 @@ export function WaferMap({ map, label, azimuths, axis }: WaferMapProps) {
         role="img"
         aria-label={label}
       >
-        {map.bands.map(({ height, path }) => (
-          <path key={height} d={path} shapeRendering="crispEdges" {...heightShade(map, height)} />
-        ))}
+        <clipPath id={id}>
+          <circle r={coordinate((R * map.radius) / map.waferRadius)} />
+        </clipPath>
+        <g clipPath={`url(#${id})`} shapeRendering="crispEdges">
+          {map.bands.map(({ height, path }) => (
+            <path key={height} d={path} {...heightShade(map, height)} />
+          ))}
+        </g>
         {map.levels.map(({ height, path }) => (
           <path
             key={height}
@@ -82,7 +89,7 @@ function rim(): string {
 }
 
 function ScanLine({ azimuth }: { azimuth: number }) {
-  const [end, other, text] = [place(azimuth, R), place(azimuth + Math.PI, R), place(azimuth, R + 70)];
+  const [end, other, text] = [place(azimuth, R), place(azimuth + Math.PI, R), place(azimuth, R + 100)];
   return (
     <g>
       <path

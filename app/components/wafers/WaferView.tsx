@@ -88,7 +88,11 @@ function Shapes({ analysis, azimuths }: { analysis: FilmAnalysis; azimuths: numb
         <h2 id="shape" className="font-semibold">
           Shape over the wafer
         </h2>
-        <p className="max-w-[60em] text-quiet">{noBreak("why" in shape ? shape.why : gravity)}</p>
+        {["why" in shape ? [shape.why] : [gravity, ...shape.remarks]].flat().map((sentence) => (
+          <p key={sentence} className="max-w-[60em] text-quiet">
+            {noBreak(sentence)}
+          </p>
+        ))}
       </div>
       {"shapes" in shape &&
         shape.shapes.map((each) => (

@@ -9,7 +9,7 @@ import { meanOf } from "./directions.ts";
 import type { FilmSubject, PlacedPair } from "./pair-points.ts";
 
 /** Degrees of freedom from which on the coverage factor is 2.00. */
-const MANY = 1e5;
+const MANY = 1000;
 
 const fromTolerance = (tolerance: number | null) => (tolerance ?? 0) / Math.sqrt(3);
 
@@ -26,8 +26,7 @@ export function budgetInput(
 ): StressBudgetInput {
   const tools = pairs.map(({ tool }) => tool);
   const offset = tools.find((tool) => tool?.offset)?.offset;
-  const studied = pairs.every(({ tool }) => tool?.forTwo !== null && tool !== null);
-  const repeatability = studied
+  const repeatability = isStudied(pairs)
     ? {
         standardUncertainty: meanUncertainty(pairs, ({ tool }) => tool?.repeatability?.standardUncertainty ?? 0),
         degreesOfFreedom: Math.min(...tools.map((tool) => tool?.repeatability?.degreesOfFreedom ?? Infinity)),
@@ -52,6 +51,20 @@ export function budgetInput(
       filmThickness: { standardUncertainty: fromTolerance(parameters.filmThicknessTolerance) },
     },
   };
+}
+
+const isStudied = (pairs: readonly PlacedPair[]) => pairs.every(({ tool }) => typeof tool?.forTwo === "number");
+
+/**
+ * Standard uncertainty, 1/m, that the instruments give the curvature of the wafer in one set of scans, and its change between two; null
+ * where an instrument was never studied. Widened for few repeats.
+ */
+export function toolOfMean(pairs: readonly PlacedPair[]): { alone: number; change: number } | null {
+  if (!isStudied(pairs)) return null;
+  const repeats = meanUncertainty(pairs, ({ tool }) => tool?.forTwo ?? 0);
+  const offset = Math.max(...pairs.map(({ tool }) => tool?.offset?.standardUncertainty ?? 0));
+  const shared = pairs.every(({ sameTool }) => sameTool) ? 0 : offset;
+  return { alone: Math.hypot(repeats, offset), change: Math.SQRT2 * Math.hypot(repeats, shared) };
 }
 
 /** Standard uncertainty of the mean over the lines when each has its own, 1/m. */

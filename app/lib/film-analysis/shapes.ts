@@ -2,13 +2,20 @@ import { EngineInputError } from "#app/engine/errors.ts";
 import { columnsOf, type ScanColumns } from "#app/engine/profile/columns.ts";
 import { fitScan } from "#app/engine/profile/fit-scan.ts";
 import { fitSurface } from "#app/engine/profile/map/fit-surface.ts";
-import { shapeFigures, type ShapeFigures, type ShapeFiguresInput } from "#app/engine/profile/map/shape-figures.ts";
+import {
+  shapeFigures,
+  type ShapeFigure,
+  type ShapeFigures,
+  type ShapeFiguresInput,
+} from "#app/engine/profile/map/shape-figures.ts";
 import type { Surface } from "#app/engine/profile/map/surface.ts";
 import { matchScans } from "#app/engine/profile/match-scans.ts";
-import { citation } from "#app/engine/sources.ts";
 import { profilePoints } from "#app/lib/scan-reading/profile-points.ts";
+import { bowFromCurvature } from "#app/engine/stoney/bow.ts";
+import { shortCitation } from "#app/lib/short-citation.ts";
 import type { ShapeView } from "#app/schemas/film-analysis.ts";
 import type { FilmSubject, PlacedPair, PlacedPoints } from "./pair-points.ts";
+import { toolOfMean } from "./budget.ts";
 import { mapView } from "./map-view.ts";
 
 type Line = ScanColumns & { azimuth: number };
@@ -34,7 +41,10 @@ export interface Shape {
  * The wafer before its film, after it, and what the film changed, each as a surface through the scans; or why there is none. The change
  * is fitted to the scans' differences, so the weight of the wafer is not in it.
  */
-export function shapesOf(pairs: readonly PlacedPair[], subject: FilmSubject): { why: string } | { shapes: Shape[] } {
+export function shapesOf(
+  pairs: readonly PlacedPair[],
+  subject: FilmSubject,
+): { why: string } | { shapes: Shape[]; remarks: string[] } {
   const { diameter, edgeExclusion } = subject.parameters;
   const lines = pairs.flatMap(({ azimuth, points }): Points[] =>
     azimuth === null || points === null ? [] : [{ azimuth, ...points }],
@@ -48,19 +58,38 @@ export function shapesOf(pairs: readonly PlacedPair[], subject: FilmSubject): { 
   try {
     const fit = (scans: Line[]) => fitSurface({ scans, radius: diameter / 2, edgeExclusion: exclusion });
     const thickness = thicknessSurface(subject, exclusion);
-    const shape = (of: ShapeView["of"], surface: Surface): Shape => shapeOf(of, surface, subject, thickness);
-    return {
-      shapes: [
-        shape("after the film", fit(lines.map(({ azimuth, post }) => ({ azimuth, ...withoutSpikes(post) })))),
-        shape("before the film", fit(lines.map(({ azimuth, pre }) => ({ azimuth, ...withoutSpikes(pre) })))),
-        shape("change by the film", fit(lines.map((line) => ({ azimuth: line.azimuth, ...difference(line) })))),
-      ],
-    };
+    const tool = toolOfMean(pairs);
+    const shape = (of: ShapeView["of"], surface: Surface): Shape => shapeOf(of, surface, { subject, thickness, tool });
+    return remarkedOnce(tool !== null, [
+      shape("after the film", fit(lines.map(({ azimuth, post }) => ({ azimuth, ...withoutSpikes(post) })))),
+      shape("before the film", fit(lines.map(({ azimuth, pre }) => ({ azimuth, ...withoutSpikes(pre) })))),
+      shape("change by the film", fit(lines.map((line) => ({ azimuth: line.azimuth, ...difference(line) })))),
+    ]);
   } catch (error) {
     if (error instanceof EngineInputError) return { why: `The scans ${error.reason}.` };
     throw error;
   }
 }
+
+/** What holds for all shapes is said once. */
+function remarkedOnce(studied: boolean, shapes: Shape[]): { shapes: Shape[]; remarks: string[] } {
+  const [first] = shapes;
+  const common = (first?.view.remarks ?? []).filter((remark) =>
+    shapes.every(({ view }) => view.remarks.includes(remark)),
+  );
+  return {
+    remarks: [studied ? WITH_TOOL : WITHOUT_TOOL, ...common],
+    shapes: shapes.map((shape) => ({
+      ...shape,
+      view: { ...shape.view, remarks: shape.view.remarks.filter((remark) => !common.includes(remark)) },
+    })),
+  };
+}
+
+const WITH_TOOL =
+  "Each ± (k = 2) holds the scatter about the surface, what the instrument repeats within, and, but for the change, how far it may be off.";
+const WITHOUT_TOOL =
+  "Each ± (k = 2) holds the scatter about the surface alone: no repeatability study of the instrument is known.";
 
 function halfLength({ x }: ScanColumns): number {
   return Math.min(-(x[0] ?? 0), x[x.length - 1] ?? 0);
@@ -100,7 +129,16 @@ function thicknessSurface({ thicknessSites, parameters }: FilmSubject, edgeExclu
   }
 }
 
-function shapeOf(of: ShapeView["of"], surface: Surface, { parameters }: FilmSubject, thickness: Surface | null): Shape {
+interface About {
+  subject: FilmSubject;
+  thickness: Surface | null;
+  tool: ReturnType<typeof toolOfMean>;
+}
+
+/** Share of the sagitta over the fitted disk that a figure of a parabola is. */
+const OF_SAGITTA: Record<ShapeFigure["name"], number> = { bow: 1, "bow, best fit": 0.5, warp: 1, sori: 1 };
+
+function shapeOf(of: ShapeView["of"], surface: Surface, { subject: { parameters }, thickness, tool }: About): Shape {
   const radius = parameters.diameter / 2;
   const change = of === "change by the film";
   const input: ShapeFiguresInput = {
@@ -114,6 +152,8 @@ function shapeOf(of: ShapeView["of"], surface: Surface, { parameters }: FilmSubj
   };
   const figures = shapeFigures(input);
   const { bow, bowBestFit, warp, sori, remarks } = figures;
+  const curvature = (change ? tool?.change : tool?.alone) ?? 0;
+  const byTool = bowFromCurvature({ curvature, radius: surface.radius });
   return {
     input,
     figures,
@@ -122,9 +162,9 @@ function shapeOf(of: ShapeView["of"], surface: Surface, { parameters }: FilmSubj
       figures: [bow, bowBestFit, warp, ...(change ? [] : [sori])].map(
         ({ name, value, standardUncertainty, definition, source }) => ({
           name,
-          value: { value, uncertainty: 2 * standardUncertainty },
+          value: { value, uncertainty: 2 * Math.hypot(standardUncertainty, OF_SAGITTA[name] * byTool) },
           definition,
-          source: citation(source),
+          source: shortCitation(source),
         }),
       ),
       map: mapView(surface, radius),

@@ -58,7 +58,7 @@ async function filmOnWafer(em: EntityManager, key: string, scans: [LoadedScan, .
     name: newest.film?.name ?? null,
     filmId: newest.film?.id ?? null,
     parameters: newest.parameters,
-    scans: scans.map(scanLine),
+    scans: scans.map(scanLine).sort((a, b) => (a.azimuth ?? -1) - (b.azimuth ?? -1)),
     remarks: remarksOn(scans),
     ...(await analyseScans(em, scans as [Scan, ...Scan[]])),
   };
