@@ -42,6 +42,7 @@ export function predictionSentences(of: Predicted, all: PredictionGroup, groups:
 const NAMED = 3;
 
 /** How much a group's slope is, or why it has none. */
-export function slopeText({ slope }: PredictionGroup): string {
-  return slope ? `${slope.value.toFixed(2)} ± ${(COVERAGE * slope.standardUncertainty).toFixed(2)}` : "too few points";
+export function slopeText({ slope, count }: PredictionGroup): string {
+  if (!slope) return count < 3 ? "too few points" : "all predicted alike";
+  return `${slope.value.toFixed(2)} ± ${(COVERAGE * slope.standardUncertainty).toFixed(2)}`;
 }

@@ -16,6 +16,8 @@ export interface PredictionPoint {
   program: string;
   predicted: number;
   predictedUncertainty: number;
+  /** names what it shares the error of its prediction with; left out where each has its own */
+  shared?: string;
   measured: number;
   measuredUncertainty: number;
   /** false where nobody stated the measured one's uncertainty, and the usual one was taken */

@@ -23,6 +23,20 @@ const wafers = z
 /** Reading and lot of a summary, as its choice names them. */
 const SUMMARY = /^([0-9a-f-]{36})\/([0-9a-f-]{36})?$/;
 
+/** What such a form says, SI; `uncertainty` is the expanded one, k = 2. The day is there unless a summary may give it. */
+export interface StepMeasurementValues {
+  step: number;
+  /** null for a list that is typed */
+  summary: { reading: string; lot: string | null } | null;
+  lot: string;
+  wafers: LotWafer[];
+  uncertainty: number | null;
+  measuredAt: Date | null;
+  instrument: string;
+  sideUp: "device" | "back" | null;
+  gravity: "compensated" | "included" | null;
+}
+
 /** Bows measured after a step: a lot's summary, or a list that is typed, with how they were measured. */
 export const stepMeasurementSchema = z
   .object({
@@ -43,7 +57,7 @@ export const stepMeasurementSchema = z
     sideUp: optionalChoice(["device", "back"]),
     gravity: optionalChoice(["compensated", "included"]),
   })
-  .transform((form, context) => {
+  .transform((form, context): StepMeasurementValues => {
     const refuse = (field: string, message: string) => {
       context.addIssue({ code: "custom", path: [field], message });
       return z.NEVER;
@@ -60,4 +74,3 @@ export const stepMeasurementSchema = z
     if (!measuredAt) return refuse("measuredAt", "Type the day of the measurement as 2026-12-01.");
     return { ...rest, measuredAt, summary: null };
   });
-export type StepMeasurementValues = z.output<typeof stepMeasurementSchema>;

@@ -138,7 +138,7 @@ function Labels({
       <text x={4} y={13} style={{ fill: colour("quiet") }}>
         {`Measured, ${axis.symbol}`}
       </text>
-      <text x={frame.right - 4} y={frame.top + 26} textAnchor="end" style={{ fill: colour("quiet") }}>
+      <text x={frame.right - 26} y={frame.top + 13} textAnchor="end" style={{ fill: colour("quiet") }}>
         {"1 : 1"}
       </text>
     </>

@@ -7,7 +7,10 @@ import type { PredictionPoint } from "#app/schemas/prediction.ts";
 
 const groupOf = (flow: string, step: number, title: string) => `${flow}: step ${step}, ${title}`;
 
-/** Bows measured after a step, and bows that lots came in with, of these flows and beside what their assessments say. */
+/**
+ * Bows measured after a step, and bows that lots came in with, of these flows and beside what their assessments say. All that is held
+ * against one assessment shares its error: more wafers do not make it known better.
+ */
 export async function bowPoints(
   em: EntityManager,
   programs: readonly string[],
@@ -39,6 +42,7 @@ async function recorded(
     program: row.program.name,
     predicted: row.predicted,
     predictedUncertainty: row.predictedUncertainty,
+    shared: row.assessment.id,
     measured: row.bow,
     measuredUncertainty: row.standardUncertainty,
     stated: row.stated,
@@ -60,6 +64,7 @@ async function flowNames(em: EntityManager, ids: readonly string[]): Promise<Map
 
 interface LotRow {
   id: string;
+  of_id: string;
   flow_name: string;
   program: string;
   created_at: Date | string;
@@ -75,7 +80,7 @@ async function received(
 ): Promise<PredictionPoint[]> {
   if (programs.length === 0 || flows?.size === 0) return [];
   const rows = await em.execute<LotRow[]>(
-    `select a.id, a.flow_name, p.name as program, a.created_at, a.lot, of.result->'steps'->0 as first
+    `select a.id, of.id as of_id, a.flow_name, p.name as program, a.created_at, a.lot, of.result->'steps'->0 as first
        from assessment a
        join program p on p.id = a.program_id
        join assessment of on of.id = (a.lot->'of'->>'id')::uuid
@@ -86,7 +91,7 @@ async function received(
   return rows.flatMap(pointsOfLot);
 }
 
-function pointsOfLot({ id, flow_name, program, created_at, lot, first }: LotRow): PredictionPoint[] {
+function pointsOfLot({ id, of_id, flow_name, program, created_at, lot, first }: LotRow): PredictionPoint[] {
   const shape = first?.atRoom ?? first?.released;
   if (!first || !shape || shape.rollRadius !== null) return [];
   const measured = lot.wafers.length > 0 ? lot.wafers : [{ slot: null, bow: lot.bow }];
@@ -97,6 +102,7 @@ function pointsOfLot({ id, flow_name, program, created_at, lot, first }: LotRow)
     program,
     predicted: shape.bow,
     predictedUncertainty: shape.standardUncertainty ?? 0,
+    shared: of_id,
     measured: bow,
     measuredUncertainty: USUAL_BOW_UNCERTAINTY,
     stated: false,

@@ -37,6 +37,8 @@ export async function stressPoints(
         program: scan.program.name,
         predicted: stress.value,
         predictedUncertainty: standardUncertainty(stress),
+        // A mean's tolerance is how films differ, each by itself; a stated value is off by the same for all of them.
+        ...(stress.meanOf === undefined ? { shared: `${scan.film.id} ${stress.value}` } : {}),
         measured: value?.value ?? scan.stress,
         measuredUncertainty,
         stated: true,

@@ -60,7 +60,11 @@ export function pairsOf(change: Bend, options: Options = {}): PlacedPair[] {
       label: `M-1, ${angle}°`,
       azimuth,
       points: { pre: { ...columnsOf(pre), day: null }, post: { ...columnsOf(post), day: null } },
-      result: scanResult(subject, { points: pre, reading: READING }, { points: post, reading: READING }),
+      result: scanResult(
+        subject,
+        { points: columnsOf(pre), reading: READING },
+        { points: columnsOf(post), reading: READING },
+      ),
       sameTool,
       tool,
     };

@@ -139,6 +139,14 @@ describe("predicted against measured", () => {
     expect(compared([])).toBeNull();
   });
 
+  it("does not know a prediction better by more wafers that share it", () => {
+    const alone = compared(good)?.all.biasUncertainty ?? 0;
+    const shared = compared(good.map((each) => ({ ...each, shared: "one assessment" })))?.all.biasUncertainty ?? 0;
+    expect(alone).toBeLessThan(1.2e-6);
+    expect(shared).toBeGreaterThan(2e-6);
+    expect(shared).toBeLessThan(2.5e-6);
+  });
+
   it("draws both axes in one scale that holds every bar", () => {
     const axis = parityAxis(
       "bow",

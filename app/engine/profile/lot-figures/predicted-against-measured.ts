@@ -11,6 +11,8 @@ export interface ParityPoint {
   predictedUncertainty: number;
   measured: number;
   measuredUncertainty: number;
+  /** points of one key share their prediction's error, which does not shrink with their number; left out, each has its own */
+  shared?: string;
 }
 
 export interface Parity {
@@ -38,9 +40,10 @@ const MORE_THAN_STATED = 2;
 /**
  * Predicted against measured, for all points and for each step: bias, spread, and the slope of measured over predicted, with
  * uncertainties. The line weights each point by its effective variance u_m² + slope² u_p² and is widened where the points scatter more
- * than stated. Figures that do not depend on the unit; bows with one convention of sign.
+ * than stated. Figures that do not depend on the unit; bows with one convention of sign. What points share of their prediction counts
+ * once in the bias, as fully correlated.
  * @throws EngineInputError for no points or one out of range
- * Source: Orear 1982 for uncertainties in both; JCGM 100:2008, annex G.3 for few points.
+ * Source: Orear 1982 for uncertainties in both; JCGM 100:2008, 5.2.2 for what is shared, annex G.3 for few points.
  */
 export function predictedAgainstMeasured(points: readonly ParityPoint[]): { all: Parity; steps: Parity[] } {
   if (points.length === 0) throw new EngineInputError("points", "are none", "at least one");
@@ -74,9 +77,10 @@ function parityOf(step: string, points: readonly ParityPoint[]): Parity {
   const stated = points.map((p) => Math.hypot(p.predictedUncertainty, p.measuredUncertainty));
   const bias = off.reduce((sum, value) => sum + value, 0) / count;
   const spread = count > 1 ? Math.sqrt(off.reduce((sum, value) => sum + (value - bias) ** 2, 0) / (count - 1)) : 0;
-  const byStated = Math.hypot(...stated) / count;
+  const own = points.map((p, n) => (p.shared === undefined ? (stated[n] ?? 0) : p.measuredUncertainty));
+  const byStated = Math.hypot(...own) / count;
   const bySpread = count > 1 ? ((studentFactor(count - 1) / 2) * spread) / Math.sqrt(count) : byStated;
-  const biasUncertainty = Math.max(byStated, bySpread);
+  const biasUncertainty = Math.hypot(Math.max(byStated, bySpread), sharedPart(points));
   const agreement = off.reduce((sum, value, n) => sum + (value / (stated[n] ?? 1)) ** 2, 0) / count;
   const slope = slopeOf(points);
   const found: Parity["off"] = [];
@@ -84,6 +88,14 @@ function parityOf(step: string, points: readonly ParityPoint[]): Parity {
   if (slope && Math.abs(slope.value - 1) > 2 * slope.standardUncertainty) found.push("slope");
   if (agreement > MORE_THAN_STATED) found.push("spread");
   return { step, count, bias, biasUncertainty, spread, slope, agreement, off: found, sentence: inWords(found, slope) };
+}
+
+/** Standard uncertainty of the mean by what points share: a sum within each key, independent between keys. */
+function sharedPart(points: readonly ParityPoint[]): number {
+  const sums = new Map<string, number>();
+  for (const { shared, predictedUncertainty } of points)
+    if (shared !== undefined) sums.set(shared, (sums.get(shared) ?? 0) + predictedUncertainty);
+  return Math.hypot(...sums.values()) / points.length;
 }
 
 function slopeOf(points: readonly ParityPoint[]): Parity["slope"] {

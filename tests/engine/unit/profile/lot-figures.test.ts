@@ -91,6 +91,28 @@ describe("acceptedValue", () => {
 });
 
 describe("predictedAgainstMeasured", () => {
+  it("counts what points share of their prediction once in the bias", () => {
+    const point = (measured: number, shared?: string) => ({
+      step: "plated",
+      predicted: 100,
+      predictedUncertainty: 4,
+      measured,
+      measuredUncertainty: 1,
+      ...(shared === undefined ? {} : { shared }),
+    });
+    const measured = [105, 105, 105, 105];
+    const bias = (keys: (string | undefined)[]) =>
+      predictedAgainstMeasured(measured.map((value, n) => point(value, keys[n]))).all;
+    expect(bias([]).biasUncertainty).toBeCloseTo(Math.hypot(4, 1) / 2, 12);
+    expect(bias(["a", "a", "a", "a"]).biasUncertainty).toBeCloseTo(Math.hypot(4, 0.5), 12);
+    // Two predictions, two points each: their errors are independent of one another.
+    expect(bias(["a", "a", "b", "b"]).biasUncertainty).toBeCloseTo(Math.hypot(4 / Math.SQRT2, 0.5), 12);
+    // Each with a key of its own is as if none had one.
+    expect(bias(["a", "b", "c", "d"]).biasUncertainty).toBeCloseTo(bias([]).biasUncertainty, 12);
+    expect(bias([]).off).toContain("bias");
+    expect(bias(["a", "a", "a", "a"]).off).not.toContain("bias");
+  });
+
   const point = (step: string, predicted: number, measured: number) => ({
     step,
     predicted,
