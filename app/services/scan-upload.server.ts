@@ -41,10 +41,7 @@ export async function uploadScan(scope: ActorScope, values: ScanValues, files: S
   }
 }
 
-async function computeScan(
-  values: ScanValues,
-  files: ScanFiles,
-): Promise<{ result: ScanResult } | Refused> {
+async function computeScan(values: ScanValues, files: ScanFiles): Promise<{ result: ScanResult } | Refused> {
   let reading: "before" | "after" = "before";
   const read = async (which: "before" | "after"): Promise<PairedProfile> => {
     reading = which;

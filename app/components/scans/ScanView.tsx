@@ -1,4 +1,3 @@
-import { Link } from "react-router";
 import { BothStresses } from "#app/components/film-analysis/BothStresses.tsx";
 import { BudgetTable } from "#app/components/film-analysis/BudgetTable.tsx";
 import { MistakeList } from "#app/components/film-analysis/MistakeList.tsx";

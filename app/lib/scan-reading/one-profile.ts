@@ -61,7 +61,10 @@ export function onlyProfile(read: ScanRead, fileName: string): ReadProfile {
     throw new ScanFileError(
       `${name} holds ${read.content.profiles.length} profiles: ${read.content.profiles.map((each) => `“${excerpt(each.name, 30)}”`).join(", ")}. Export the one that is meant to a file of its own.`,
     );
-  return { points: { x: only.x, z: only.z }, reading: fileReading(read.reading, read.content, about(only, only.x.length)) };
+  return {
+    points: { x: only.x, z: only.z },
+    reading: fileReading(read.reading, read.content, about(only, only.x.length)),
+  };
 }
 
 /**
@@ -73,7 +76,10 @@ export function storedProfile({ reading, content }: ScanReadingResult, which: nu
   const profile = content.kind === "profiles" ? content.profiles[which] : undefined;
   if (content.kind !== "profiles" || !profile) return null;
   const [x, z] = [Float64Array.from(profile.x), Float64Array.from(profile.z)];
-  const [from, to] = x.reduce(([low = 0, high = 0], at) => [Math.min(low, at), Math.max(high, at)], [Infinity, -Infinity]);
+  const [from, to] = x.reduce(
+    ([low = 0, high = 0], at) => [Math.min(low, at), Math.max(high, at)],
+    [Infinity, -Infinity],
+  );
   const read = about({ ...profile, x, from: from ?? 0, to: to ?? 0 }, profile.points);
   return { points: { x, z }, reading: fileReading(reading, content, read) };
 }
