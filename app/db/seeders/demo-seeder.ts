@@ -11,6 +11,7 @@ import { addDemoAssessment } from "./demo-assessment.ts";
 import { addDemoFlow } from "./demo-flow.ts";
 import { DEMO_FLOWS } from "./demo-flows.ts";
 import { addDemoLibrary } from "./demo-library.ts";
+import { addDemoLot } from "./demo-lot.ts";
 import { addDemoScan } from "./demo-scan.ts";
 import { addDemoStack, DEMO_STACKS } from "./demo-stacks.ts";
 import { seedLibrary } from "./seed-library.ts";
@@ -21,7 +22,7 @@ const PROGRAMS = [
   { name: "Fulmar", slug: "fulmar", diameter: 0.3, purpose: "Stacked device with through-silicon vias, to 20 µm" },
 ];
 
-/** The invented pilot line: people, library, three programs with their flows whole and a stack each, an assessment and a scan. */
+/** The invented pilot line: people, library, three programs with their flows whole and a stack each, an assessment, a scan and a lot. */
 export class DemoSeeder extends Seeder {
   override async run(em: EntityManager): Promise<void> {
     noteScope(em, { personId: null, requestId: "demo data" });
@@ -52,6 +53,7 @@ export class DemoSeeder extends Seeder {
     const who = (account: string) => em.findOneOrFail(Person, { email: account });
     await addDemoAssessment(em, await who("engineer@kestrel-ridge.example"));
     await addDemoScan(em, await who("technician@kestrel-ridge.example"));
+    await addDemoLot(em, await who("technician@kestrel-ridge.example"));
     await em.flush();
   }
 }
