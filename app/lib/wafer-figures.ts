@@ -69,7 +69,9 @@ function figuresOf(content: WaferMeasurementContent): Told[] {
     }
     case "reduced stress": {
       const stress = content.stresses.find((row) => row.stress !== null)?.stress;
-      return stress === undefined || stress === null ? [] : [["stress", { value: stress, how: "as its tool reduced it" }]];
+      return stress === undefined || stress === null
+        ? []
+        : [["stress", { value: stress, how: "as its tool reduced it" }]];
     }
   }
 }
