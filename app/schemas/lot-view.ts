@@ -12,6 +12,12 @@ export interface LotRow {
   createdBy: string;
 }
 
+/** Wafers that belong to no lot, the newest of them, and how many there are in all. */
+export interface LooseWafers {
+  rows: { id: string; name: string; program: string; createdAt: string }[];
+  total: number;
+}
+
 /** A wafer of a lot, with the newest of each figure. */
 export interface LotWafer {
   id: string;

@@ -129,6 +129,7 @@ test("what is in is known the next time, is undone where it stands, and is there
   await choose(page, [...pair, file("lot.csv", summaryOf(lot))]);
   await fillShared(page);
   await page.getByRole("button", { name: "Import 3 files" }).click();
+  await expect(page.getByText("3 imported.")).toBeVisible();
   await expect(row(page, "is a scan:")).toContainText(`${wafer}, 45°`);
   await expect(row(page, "lot.csv")).toContainText(`a summary of eight wafers, lot ${lot}`);
 
@@ -172,6 +173,7 @@ test.describe("a profile", () => {
     await expect(page.getByRole("heading", { name: "2 files to import" })).toBeVisible();
     await fillShared(page);
     await page.getByRole("button", { name: "Import 2 files" }).click();
+    await expect(page.getByText("2 imported.")).toBeVisible();
     await list(page).getByRole("link", { name: wafer }).click();
     await expect(page.getByText(instrument)).toBeVisible();
     await page.goBack();

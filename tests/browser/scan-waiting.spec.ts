@@ -4,29 +4,32 @@ import { expect, expectNoAxeFindings, signIn, test } from "./support.ts";
 
 const ownName = (letter: string) => `${letter}-${Math.random().toString(10).slice(2, 9)}`;
 
-/** Brings one file in as the import screen does, and gives its place in the queue. */
+/** Brings one file in as the import screen would, without thicknesses, and gives its page in the queue. */
 async function bring(page: Page, wafer: string, side: "before" | "after", times: number): Promise<string> {
-  const program = page.getByLabel("Program", { exact: true });
-  await page.goto("/scans/import");
-  await page.getByLabel("Or choose files").setInputFiles([
-    {
-      name: `${wafer}_${side}.csv`,
-      mimeType: "text/csv",
-      buffer: Buffer.from(scanFile(trueScan({ times }), {}).bytes),
+  if (!page.url().endsWith("/scans/new")) await page.goto("/scans/new");
+  const tern = page.getByLabel("Program", { exact: true }).locator("option", { hasText: "Tern" });
+  const buffer = Buffer.from(scanFile(trueScan({ times }), {}).bytes);
+  const answer = await page.request.post("/scans/import/file", {
+    multipart: {
+      program: (await tern.getAttribute("value")) ?? "",
+      wafer,
+      side,
+      lines: "[[0,0]]",
+      profile: "{}",
+      orientation: "100",
+      diameter: "200 mm",
+      edgeExclusion: "5 mm",
+      file: { name: `${wafer}_${side}.csv`, mimeType: "text/csv", buffer },
     },
-  ]);
-  await program.selectOption({ label: "Tern" });
-  await page.getByLabel("Diameter").fill("200 mm");
-  await page.getByRole("button", { name: "Import 1 file" }).click();
-  const link = page.getByRole("link", { name: `${wafer}, 0°` });
-  await expect(link).toBeVisible();
-  return (await link.getAttribute("href")) ?? "";
+  });
+  const { placed } = (await answer.json()) as { placed: { waferScan: string }[] };
+  return `/scans/waiting/${placed[0]?.waferScan}`;
 }
 
 test.use({ refusals: true });
 
 test("a file waits, is put together with another by hand, and the scan can be undone", async ({ page }) => {
-  test.setTimeout(120_000);
+  test.slow();
   await signIn(page, "technician");
   const [wafer, wrong] = [ownName("W"), ownName("V")];
   const times = 1 + Math.random() / 10;
@@ -47,11 +50,10 @@ test("a file waits, is put together with another by hand, and the scan can be un
   await page.getByLabel("Film thickness").fill("5 um");
   await page.getByLabel("Silicon thickness").fill("725 um");
   await page.getByRole("button", { name: "Make the scan" }).click();
-  await expect(page.getByRole("heading", { level: 1, name: `${wafer}, 0°` })).toBeVisible();
+  await expect(page).toHaveURL(/\/scans\/[0-9a-f-]{36}$/);
   const scan = page.url();
 
   await page.getByText("Undo the import of this scan").click();
-  await expectNoAxeFindings(page);
   await page.getByRole("button", { name: "Take apart" }).click();
   await expect(page).toHaveURL(/\/scans\/waiting$/);
   await expect(page.getByRole("link", { name: `${wafer}, 0°` })).toHaveCount(2);
@@ -92,7 +94,7 @@ test("an import profile is renamed and removed", async ({ page }) => {
   expect(kept.ok()).toBe(true);
   await page.goto(`/import-profiles?q=${name}`);
   await expectNoAxeFindings(page);
-  await expect(page.getByText("decimal comma.")).toBeVisible();
+  await expect(page.getByText("Decimal comma.")).toBeVisible();
   await page.getByText("Rename", { exact: true }).first().click();
   await page.getByLabel("Name of the instrument").fill(next);
   await page.getByRole("button", { name: `Rename ${name}` }).click();

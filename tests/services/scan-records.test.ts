@@ -12,10 +12,11 @@ const queue = () => import("#app/services/wafers/waiting.server.ts");
 const byHand = () => import("#app/services/wafers/hand-pairing.server.ts");
 const undoing = () => import("#app/services/wafers/undo-import.server.ts");
 const scans = () => import("#app/services/scans.server.ts");
+const loose = () => import("#app/services/wafers/loose-wafers.server.ts");
 const lots = () => import("#app/services/wafers/lots.server.ts");
 
 // Loading the server's modules takes longer than a test should.
-beforeAll(() => Promise.all([importing(), queue(), byHand(), undoing(), scans(), lots()]), 60_000);
+beforeAll(() => Promise.all([importing(), queue(), byHand(), undoing(), scans(), lots(), loose()]), 60_000);
 
 let technician: ActorScope;
 let tern = "";
@@ -296,5 +297,15 @@ describe("a table", () => {
       kind: "thickness map",
       wafers: 1,
     });
+  });
+
+  test("of no lot is found by its wafer, and by nobody of another program", async () => {
+    const { listLots } = await lots();
+    const { looseWafers } = await loose();
+    waiting(await bring("before", 83));
+    expect((await looseWafers(technician, params("w-83"))).rows).toMatchObject([{ name: "W-83", program: "Tern" }]);
+    const found = await listLots(technician, params("T0412-07"));
+    expect(found.rows).toMatchObject([{ name: "T-0412", wafers: 25, program: "Tern" }]);
+    expect((await listLots({ ...technician, actor: { ...technician.actor, id: petrel } }, params())).total).toBe(0);
   });
 });

@@ -5,17 +5,17 @@ import { COVERAGE } from "#app/lib/scan-answer.ts";
 import { WAFER_FIGURES, type WaferFigure, type WaferFigureName } from "#app/lib/wafer-figures.ts";
 import type { LotWafer } from "#app/schemas/lot-view.ts";
 
-const HEADS: Record<WaferFigureName, { head: string; unit: string; sign?: boolean }> = {
-  bow: { head: "Bow", unit: "µm", sign: true },
-  warp: { head: "Warp", unit: "µm" },
-  thickness: { head: "Thickness", unit: "µm" },
-  "thickness variation": { head: "TTV", unit: "µm" },
-  stress: { head: "Film stress", unit: "MPa", sign: true },
+const HEADS: Record<WaferFigureName, { head: string; unit: string; decimals: number; sign?: boolean }> = {
+  bow: { head: "Bow", unit: "µm", decimals: 1, sign: true },
+  warp: { head: "Warp", unit: "µm", decimals: 1 },
+  thickness: { head: "Thickness", unit: "µm", decimals: 1 },
+  "thickness variation": { head: "TTV", unit: "µm", decimals: 2 },
+  stress: { head: "Film stress", unit: "MPa", decimals: 1, sign: true },
 };
 
 /**
- * The wafers of a lot by slot, the newest of each figure. How a column was measured stands once in its head; where its wafers were
- * measured in different ways it stands with each, because only like is compared with like.
+ * The wafers of a lot by slot, the newest of each figure. How a column was measured stands once below; where its wafers were measured
+ * in different ways it stands with each, because only like is compared with like.
  */
 export function LotWafers({ wafers }: { wafers: readonly LotWafer[] }) {
   const ways = Object.fromEntries(WAFER_FIGURES.map((name) => [name, wayOf(wafers, name)])) as Record<
@@ -37,7 +37,6 @@ export function LotWafers({ wafers }: { wafers: readonly LotWafer[] }) {
                 <th key={name} scope="col" className="num min-w-24">
                   {HEADS[name].head}
                   <span className="block">{HEADS[name].unit}</span>
-                  {ways[name] && <span className="ml-auto block max-w-44 whitespace-normal">{ways[name]}</span>}
                 </th>
               ))}
               <th scope="col" className="num">
@@ -49,7 +48,7 @@ export function LotWafers({ wafers }: { wafers: readonly LotWafer[] }) {
             {wafers.map(({ id, slot, name, figures, scans, waiting }) => (
               <tr key={id}>
                 <td className="num">{slot ?? <span className="text-quiet">–</span>}</td>
-                <th scope="row" className="font-normal">
+                <th scope="row" className="min-w-24 font-normal">
                   <Link to={`/wafers/${id}`} className="link wrap-anywhere">
                     {name}
                   </Link>
@@ -68,7 +67,15 @@ export function LotWafers({ wafers }: { wafers: readonly LotWafer[] }) {
           </tbody>
         </table>
       </div>
-      <p className="mt-2 text-label text-quiet">
+      <dl className="mt-2 text-label">
+        {WAFER_FIGURES.filter((name) => ways[name]).map((name) => (
+          <div key={name} className="flex flex-wrap gap-x-2">
+            <dt>{HEADS[name].head}</dt>
+            <dd className="text-quiet">{ways[name]}</dd>
+          </div>
+        ))}
+      </dl>
+      <p className="mt-1 text-label text-quiet">
         Bow as its tool gives it: with the device side up, centre above the reference plane is positive. Uncertainties
         are expanded, k = 2; where no ± stands, the tool gave none.
       </p>
@@ -88,11 +95,11 @@ const way = ({ how, on }: WaferFigure) => [how, on].filter((text) => text !== ""
 
 function Figure({ figure, name, told }: { figure: WaferFigure | undefined; name: WaferFigureName; told: boolean }) {
   if (!figure) return <span className="text-quiet">–</span>;
-  const { unit, sign } = HEADS[name];
+  const { unit, sign, decimals } = HEADS[name];
   const dimension = name === "stress" ? "stress" : "length";
   const text =
     figure.uncertainty === null
-      ? formatQuantity(figure.value, dimension, { unit, sign })
+      ? formatQuantity(figure.value, dimension, { unit, sign, decimals })
       : formatWithUncertainty(figure.value, COVERAGE * figure.uncertainty, dimension, { unit, sign });
   return (
     <>

@@ -43,7 +43,7 @@ function ProfileItem({
       {fault !== null && <Notice kind="error" title={fault} />}
       <h2 className="font-semibold wrap-anywhere">{name}</h2>
       <p className="max-w-240 wrap-anywhere text-quiet">
-        {words.length === 0 ? "Everything is left to the file." : `${words.join("; ")}.`}
+        {words.length === 0 ? "Everything is left to the file." : `${capital(words.join("; "))}.`}
       </p>
       <p className="text-label text-quiet">
         {stamp.updatedBy}, {stamp.updatedAt.slice(0, 10)}
@@ -78,3 +78,5 @@ function ProfileItem({
     </>
   );
 }
+
+const capital = (sentence: string) => sentence.charAt(0).toUpperCase() + sentence.slice(1);

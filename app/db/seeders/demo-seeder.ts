@@ -12,6 +12,7 @@ import { addDemoFlow } from "./demo-flow.ts";
 import { DEMO_FLOWS } from "./demo-flows.ts";
 import { addDemoInstrument } from "./demo-instrument.ts";
 import { addDemoLibrary } from "./demo-library.ts";
+import { addDemoLot } from "./demo-lot.ts";
 import { addDemoScan } from "./demo-scan.ts";
 import { addDemoStack, DEMO_STACKS } from "./demo-stacks.ts";
 import { addDemoWafer } from "./demo-wafer.ts";
@@ -23,8 +24,8 @@ const PROGRAMS = [
   { name: "Fulmar", slug: "fulmar", diameter: 0.3, purpose: "Stacked device with through-silicon vias, to 20 µm" },
 ];
 
-/** The invented pilot line: people, library, three programs with their flows whole and a stack each, an assessment, scans and their
- * instrument. */
+/** The invented pilot line: people, library, three programs with their flows whole and a stack each, an assessment, scans with their
+ * instrument and a lot. */
 export class DemoSeeder extends Seeder {
   override async run(em: EntityManager): Promise<void> {
     noteScope(em, { personId: null, requestId: "demo data" });
@@ -58,6 +59,7 @@ export class DemoSeeder extends Seeder {
     addDemoInstrument(em, await who("technician@kestrel-ridge.example"));
     await em.flush();
     await addDemoWafer(em, await who("technician@kestrel-ridge.example"));
+    await addDemoLot(em, await who("technician@kestrel-ridge.example"));
     await em.flush();
   }
 }

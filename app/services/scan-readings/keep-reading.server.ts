@@ -4,17 +4,7 @@ import { ScanReading } from "#app/db/entities/scan-reading.ts";
 import { ENGINE_VERSION } from "#app/engine/version.ts";
 import type { ReadingSettings, ScanReadingResult } from "#app/schemas/scan-reading.ts";
 import type { ActorScope } from "#app/server/scope.server.ts";
-import { sha256 } from "../scan-files.server.ts";
-
-/** What tells two ways of reading a file apart, whatever the order in which they were written down. */
-export function settingsHash(settings: ReadingSettings): string {
-  return sha256(JSON.stringify(settings, sorted));
-}
-
-function sorted(_key: string, value: unknown): unknown {
-  if (typeof value !== "object" || value === null || Array.isArray(value)) return value;
-  return Object.fromEntries(Object.entries(value).toSorted(([one], [other]) => (one < other ? -1 : 1)));
-}
+import { settingsHash } from "./settings-hash.ts";
 
 /** The id of the reading of a file in one way; null when it has not been read in that way. */
 export async function knownReading(

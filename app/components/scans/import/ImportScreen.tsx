@@ -1,12 +1,11 @@
 import type { SubmissionResult } from "@conform-to/react";
-import { useCallback, useMemo } from "react";
+import { useCallback, useMemo, useState } from "react";
 import { Link } from "react-router";
 import type { Choice } from "#app/components/forms/ChoiceField.tsx";
 import { UnsavedGuard } from "#app/components/forms/UnsavedGuard.tsx";
 import { RunProgress } from "#app/components/ui/RunProgress.tsx";
 import { useInBrowser } from "#app/components/ui/use-in-browser.ts";
-import { MOST_FILES } from "#app/lib/scan-import/batch.ts";
-import { kindOf } from "#app/lib/scan-import/place-words.ts";
+import { MOST_FILES, type BatchFile } from "#app/lib/scan-import/batch.ts";
 import { batchPlan } from "#app/lib/scan-import/plan.ts";
 import { BatchForm } from "./BatchForm.tsx";
 import { DropZone } from "./DropZone.tsx";
@@ -35,7 +34,7 @@ export function ImportScreen({ programs, films, profiles }: Props) {
   const lastResult = useMemo(() => resultOf(errors), [errors]);
   const ready = plan.items.reduce((sum, item) => sum + item.files.length, 0);
   const begun = files.length > 0 || results.length > 0;
-  const onlyTables = files.length > 0 && files.every((file) => kindOf(file) !== "profiles");
+  const onlyTables = useOnlyTables(files);
   const counted = ready === 1 ? "1 file" : `${ready} files`;
   if (!useInBrowser())
     return (
@@ -53,16 +52,18 @@ export function ImportScreen({ programs, films, profiles }: Props) {
       <DropZone onFiles={add} passedOver={batch.passedOver} most={MOST_FILES} />
       {begun && (
         <div className="frame mt-4">
-          <section aria-labelledby="batch-files">
-            <h2 id="batch-files" className="p-3 font-semibold tablet:px-6">
-              {files.length === 1 ? "1 file" : `${files.length} files`}
-            </h2>
-            <ul className="border-t border-line">
-              {files.map((file) => (
-                <FileItem key={file.key} file={file} known={profiles} others={files.length > 1} change={change} />
-              ))}
-            </ul>
-          </section>
+          {files.length > 0 && (
+            <section aria-labelledby="batch-files">
+              <h2 id="batch-files" className="p-3 font-semibold tablet:px-6">
+                {files.length === 1 ? "1 file" : `${files.length} files`}
+              </h2>
+              <ul className="border-t border-line">
+                {files.map((file) => (
+                  <FileItem key={file.key} file={file} known={profiles} others={files.length > 1} change={change} />
+                ))}
+              </ul>
+            </section>
+          )}
           <BatchForm
             id={FORM}
             programs={programs}
@@ -76,12 +77,12 @@ export function ImportScreen({ programs, films, profiles }: Props) {
           />
           <section aria-labelledby="batch-import" className="border-t border-ink p-4 tablet:px-6">
             <h2 id="batch-import" className="mb-1 font-semibold">
-              {counted} to import
+              {ready === 0 && results.length > 0 ? "Imported" : `${counted} to import`}
             </h2>
             <ImportList plan={plan} results={results} refused={refused} />
             <div className="mt-3 flex flex-wrap items-center gap-3">
               <button type="submit" form={FORM} className="btn btn-primary" disabled={sending !== null || ready === 0}>
-                {sending !== null ? "Importing" : `Import ${counted}`}
+                {sending !== null ? "Importing" : ready === 0 ? "Import" : `Import ${counted}`}
               </button>
               {sending !== null && <RunProgress done={sending.done} of={sending.of} label="Files imported" />}
               <p role="status" className="text-quiet">
@@ -93,6 +94,17 @@ export function ImportScreen({ programs, films, profiles }: Props) {
       )}
     </>
   );
+}
+
+/**
+ * Whether all that has been read is tables. Once a profile was there it stays so: what was typed for the profiles is not lost when the
+ * last of them is in.
+ */
+function useOnlyTables(files: readonly BatchFile[]): boolean {
+  const [profiled, setProfiled] = useState(false);
+  const kinds = files.flatMap(({ told }) => told?.layout?.reading.kind ?? []);
+  if (!profiled && kinds.includes("profiles")) setProfiled(true);
+  return !profiled && kinds.length > 0;
 }
 
 function resultOf(errors: Record<string, string[]> | null): SubmissionResult<string[]> | null {

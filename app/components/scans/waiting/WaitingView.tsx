@@ -33,8 +33,8 @@ export function WaitingView({ file, films, mayUpload, answers }: Props) {
             <HandPairForm file={file} films={films} lastResult={answers?.pair ?? null} />
           </section>
           <div className="min-w-0 border-ink p-4 max-wide:border-t tablet:p-6 wide:border-l">
-            <section aria-labelledby="move">
-              <h2 id="move" className="mb-2 font-semibold">
+            <section aria-labelledby="elsewhere">
+              <h2 id="elsewhere" className="mb-2 font-semibold">
                 It belongs elsewhere
               </h2>
               <MoveForm file={file} lastResult={answers?.move ?? null} />

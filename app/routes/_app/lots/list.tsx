@@ -1,5 +1,6 @@
 import { Link } from "react-router";
 import { PageHead } from "#app/components/layout/PageHead.tsx";
+import { LooseWaferList } from "#app/components/lots/LooseWaferList.tsx";
 import { LOT_COLUMNS } from "#app/components/lots/lot-columns.tsx";
 import { DataTable } from "#app/components/ui/DataTable.tsx";
 import { EmptyState } from "#app/components/ui/EmptyState.tsx";
@@ -9,6 +10,7 @@ import { programsWhere } from "#app/policies/permissions.ts";
 import { scopeOf } from "#app/server/contexts.server.ts";
 import { withinPages } from "#app/server/list-page.server.ts";
 import { scanPrograms } from "#app/services/scans.server.ts";
+import { looseWafers } from "#app/services/wafers/loose-wafers.server.ts";
 import { listLots, LOT_SORTS } from "#app/services/wafers/lots.server.ts";
 import type { Route } from "./+types/list";
 
@@ -20,13 +22,14 @@ export async function loader({ context, url }: Route.LoaderArgs) {
   const params = readListParams(url.searchParams, { sorts: LOT_SORTS, filters: ["program"], descending: true });
   return {
     page: withinPages(url, await listLots(scope, params)),
+    loose: await looseWafers(scope, params),
     programs: programs.map(({ programName, programSlug }) => ({ value: programSlug, label: programName })),
     mayUpload: programsWhere(scope.actor, "upload scans").length > 0,
   };
 }
 
 export default function Lots({ loaderData }: Route.ComponentProps) {
-  const { page, programs, mayUpload } = loaderData;
+  const { page, loose, programs, mayUpload } = loaderData;
   const searched = page.params.query !== "" || Object.values(page.params.filters).some(Boolean);
   const importing = mayUpload && (
     <Link to="/scans/import" className="btn btn-primary">
@@ -52,6 +55,7 @@ export default function Lots({ loaderData }: Route.ComponentProps) {
             : "A lot stands here as soon as a file is imported that names it: a summary of its wafers, a thickness map, or a scan of one of them."}
         </EmptyState>
       )}
+      <LooseWaferList wafers={loose} />
     </>
   );
 }
