@@ -68,7 +68,7 @@ function Row({ row, k, total }: { row: BudgetRow; k: number; total: number }) {
   const share = total === 0 ? 0 : contribution ** 2 / total;
   return (
     <tr>
-      <th scope="row" className="font-normal">
+      <th scope="row" className="min-w-44 font-normal">
         {WORDS[input] ?? input}
         <span className="block text-label text-quiet">
           {SHARED[shared]}

@@ -37,7 +37,7 @@ export function ScanLines({ scans }: { scans: ScanLine[] }) {
           <tbody>
             {scans.map(({ id, label, azimuth, change, stress, instrument, createdAt, createdBy }) => (
               <tr key={id}>
-                <th scope="row" className="font-normal wrap-anywhere">
+                <th scope="row" className="min-w-44 font-normal wrap-anywhere">
                   <Link to={`/scans/${id}`} className="link">
                     {label}
                   </Link>

@@ -2,10 +2,12 @@ import type { EntityManager } from "@mikro-orm/postgresql";
 import type { ImportProfile } from "#app/db/entities/import-profile.ts";
 import type { Scan } from "#app/db/entities/scan.ts";
 import { ScanFile } from "#app/db/entities/scan-file.ts";
+import { ScanReading } from "#app/db/entities/scan-reading.ts";
 import { WaferScan } from "#app/db/entities/wafer-scan.ts";
 import { faceUpScan, lineAzimuth } from "#app/engine/profile/orient-scan.ts";
 import type { CalendarDay } from "#app/engine/profile/mistakes/scan-checks.ts";
 import { centred, type KnownTool, type PlacedPair, type PlacedPoints } from "#app/lib/film-analysis/pair-points.ts";
+import { twoTools } from "#app/lib/film-analysis/two-tools.ts";
 import { profilePoints } from "#app/lib/scan-reading/profile-points.ts";
 import { ScanFileError } from "#app/lib/scan-reading/refusal.ts";
 import { readScanFile } from "#app/lib/scan-reading/scan-reader.ts";
@@ -19,28 +21,48 @@ const LARGEST_READ_AGAIN = 2 * 1024 * 1024;
 /** Instruments that were asked for already, by id. */
 export type KnownTools = Map<string, KnownTool>;
 
-/** A scan with all its points, placed on its wafer. */
-export async function pairOfScan(em: EntityManager, scan: Scan, tools: KnownTools): Promise<PlacedPair> {
+/** A scan placed on its wafer, and how to get at its points. */
+export interface ScanOnWafer {
+  pair: Omit<PlacedPair, "points">;
+  points: () => Promise<PlacedPair["points"]>;
+}
+
+/** A scan with what is known of its place and its instruments; its points come when they are asked for. */
+export async function scanOnWafer(em: EntityManager, scan: Scan, tools: KnownTools): Promise<ScanOnWafer> {
   const result = scan.result.unwrap() as PlacedPair["result"];
-  const [before, after] = await Promise.all([placed(em, scan.beforeScan), placed(em, scan.afterScan)]);
-  const { parameters } = scan;
-  const azimuth = scan.azimuth ?? null;
-  const pre = before ? pointsOf(before, parameters) : await readAgain(em, scan.before, result.before, parameters);
-  const post = after ? pointsOf(after, parameters) : await readAgain(em, scan.after, result.after, parameters);
-  const instrument = scan.instrument ?? before?.instrument ?? null;
-  const other = after?.instrument ?? instrument;
+  const [before, after] = [await placed(em, scan.beforeScan), await placed(em, scan.afterScan)];
+  const first = before?.instrument ?? scan.instrument ?? null;
+  const second = after?.instrument ?? scan.instrument ?? first;
+  const sameTool = !first || !second || first.id === second.id;
+  const [one, other] = [await toolIf(em, first, tools), await toolIf(em, second, tools)];
   return {
-    id: scan.id,
-    label: scan.label,
-    azimuth: azimuth === null ? null : lineAzimuth(azimuth),
-    points: pre && post ? { pre, post } : null,
-    result,
-    sameTool: !instrument || !other || instrument.id === other.id,
-    tool: instrument ? await known(em, instrument as ImportProfile, tools) : null,
+    pair: {
+      id: scan.id,
+      label: scan.label,
+      azimuth: typeof scan.azimuth === "number" ? lineAzimuth(scan.azimuth) : null,
+      result,
+      sameTool,
+      tool: one && other && !sameTool ? twoTools(one, other) : one,
+    },
+    points: async () => {
+      const { parameters } = scan;
+      const pre = before
+        ? await kept(em, before, parameters)
+        : await readAgain(em, scan.before, result.before, parameters);
+      const post = after
+        ? await kept(em, after, parameters)
+        : await readAgain(em, scan.after, result.after, parameters);
+      return pre && post ? { pre, post } : null;
+    },
   };
 }
 
-async function known(em: EntityManager, instrument: ImportProfile, tools: KnownTools): Promise<KnownTool> {
+async function toolIf(
+  em: EntityManager,
+  instrument: ImportProfile | null,
+  tools: KnownTools,
+): Promise<KnownTool | null> {
+  if (!instrument) return null;
   const found = tools.get(instrument.id) ?? (await toolOf(em, instrument));
   tools.set(instrument.id, found);
   return found;
@@ -48,19 +70,21 @@ async function known(em: EntityManager, instrument: ImportProfile, tools: KnownT
 
 async function placed(em: EntityManager, scan: { id: string } | null | undefined) {
   if (!scan) return null;
-  return em.findOne(WaferScan, { id: scan.id }, { populate: ["reading", "reading.result", "instrument"] });
+  return em.findOne(WaferScan, { id: scan.id }, { populate: ["instrument"] });
 }
 
 /** The points of a placed scan as they were kept, its line run the one way. */
-function pointsOf(
-  scan: NonNullable<Awaited<ReturnType<typeof placed>>>,
+async function kept(
+  em: EntityManager,
+  { reading, profile: number, azimuth }: NonNullable<Awaited<ReturnType<typeof placed>>>,
   { diameter }: ScanParameters,
-): PlacedPoints | null {
-  const { reading, content } = scan.reading.result.get();
-  const profile = content.kind === "profiles" ? content.profiles[scan.profile] : undefined;
+): Promise<PlacedPoints | null> {
+  const { result } = await em.findOneOrFail(ScanReading, { id: reading.id }, { populate: ["result"] });
+  const { reading: how, content } = result.get();
+  const profile = content.kind === "profiles" ? content.profiles[number] : undefined;
   if (!profile) return null;
-  const turned = faceUpScan({ ...centred(profile, diameter), azimuth: scan.azimuth }, { up: "device side" });
-  return { x: turned.x, z: turned.z, day: dayOf(reading.date?.day ?? null) };
+  const { x, z } = faceUpScan({ ...centred(profile, diameter), azimuth }, { up: "device side" });
+  return { x, z, day: dayOf(how.date?.day ?? null) };
 }
 
 /** The only profile of a file, read again as it was read when it came; null for a file that is too large for that. */
