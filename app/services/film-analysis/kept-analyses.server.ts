@@ -11,7 +11,7 @@ const kept = new Map<string, Analysed>();
  * changed film is another question; what somebody may see is checked before they are put together.
  */
 export async function keptAnalysis(inputs: unknown, work: () => Promise<Analysed>): Promise<Analysed> {
-  const key = sha256(new TextEncoder().encode(JSON.stringify([ENGINE_VERSION, inputs])));
+  const key = sha256(JSON.stringify([ENGINE_VERSION, inputs]));
   const known = kept.get(key) ?? (await work());
   // The newest stand last.
   kept.delete(key);
