@@ -150,10 +150,13 @@ describe("a write", () => {
     expect(touched).toEqual([{ slug: "tern" }]);
   });
 
-  test.each(["assessment", "scan_file", "audit_event", "film_stress_in_use"])("never changes or deletes a row of %s", async (table) => {
-    await expect(forgetful(engineer, `update "${table}" set id = id`)).rejects.toThrow(/permission denied/);
-    await expect(forgetful(engineer, `delete from "${table}"`)).rejects.toThrow(/permission denied/);
-  });
+  test.each(["assessment", "scan_file", "audit_event", "film_stress_in_use"])(
+    "never changes or deletes a row of %s",
+    async (table) => {
+      await expect(forgetful(engineer, `update "${table}" set id = id`)).rejects.toThrow(/permission denied/);
+      await expect(forgetful(engineer, `delete from "${table}"`)).rejects.toThrow(/permission denied/);
+    },
+  );
 
   test("of the owner does not change what was noted either", async () => {
     await expect(asOwner(database, "update audit_event set subject = 'x'")).rejects.toThrow(/never changed/);

@@ -245,7 +245,9 @@ test("a value measured elsewhere is typed in with its source, and the mean can b
   const { addTypedValue, putMeanIntoUse } = await changing();
   const copper = await idOf("film", "Plated copper A");
   const version = async () => (await historyOf(engineer, "", copper)).film.version;
-  expect(await putMeanIntoUse(engineer, { filmId: copper, version: await version() })).toMatchObject({ outcome: "refused" });
+  expect(await putMeanIntoUse(engineer, { filmId: copper, version: await version() })).toMatchObject({
+    outcome: "refused",
+  });
   const typed = {
     value: 24e6,
     uncertainty: 2e6,
@@ -258,7 +260,9 @@ test("a value measured elsewhere is typed in with its source, and the mean can b
   expect(await addTypedValue(engineer, { filmId: copper, version: await version() }, typed)).toMatchObject({
     outcome: "saved",
   });
-  expect(await putMeanIntoUse(engineer, { filmId: copper, version: await version() })).toMatchObject({ outcome: "saved" });
+  expect(await putMeanIntoUse(engineer, { filmId: copper, version: await version() })).toMatchObject({
+    outcome: "saved",
+  });
   expect(await stressOf(copper)).toMatchObject({
     value: 24e6,
     tolerance: expect.closeTo(1e6 * Math.sqrt(3), -2),
