@@ -118,9 +118,11 @@ test.describe("a film's history", () => {
     await signIn(page, "technician");
     await page.goto("/scans?q=M-0388");
     await page.getByRole("link", { name: "M-0388" }).click();
+    await page.waitForURL(/\/scans\/[0-9a-f-]{36}$/);
     await expect(page.getByText("An engineer or process owner of the program may accept it.")).toBeVisible();
     await expect(page.getByRole("link", { name: "Accept into the history" })).toHaveCount(0);
     await page.getByRole("link", { name: "Polymer dielectric A" }).click();
+    await page.waitForURL(/\/films\//);
     await expect(page.getByRole("heading", { name: "Stress history" })).toBeVisible();
     await expect(page.getByText("Add a value measured elsewhere")).toHaveCount(0);
   });
