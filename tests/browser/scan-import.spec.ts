@@ -185,7 +185,8 @@ test.describe("a profile", () => {
       file("M-7_pre.csv", scans.before(style)),
       file("M-8_pre.csv", scans.before({ heightUnit: "nm", lines: ["x,z (nm)"] })),
     ]);
-    await page.getByLabel("Use profile of an instrument").first().selectOption({ label: instrument });
+    await page.getByRole("combobox", { name: "Unit of x" }).first().selectOption("mm");
+    await page.getByRole("combobox", { name: "Unit of z" }).first().selectOption("µm");
     await page.getByRole("button", { name: "Apply to all files of this batch" }).first().click();
     await expect(page.getByText(/M-8_pre\.csv, row 1: .*in nm, but µm is chosen/)).toBeVisible();
   });
