@@ -8,14 +8,16 @@ interface Props {
   plan: BatchPlan;
   results: readonly ImportResult[];
   refused: ReadonlyMap<string, string>;
+  /** files are on their way */
+  sending: boolean;
 }
 
 /** What came of the files that were sent, what will come of those that are ready, and which stay for what reason. */
-export function ImportList({ plan: { items, staying }, results, refused }: Props) {
+export function ImportList({ plan: { items, staying }, results, refused, sending }: Props) {
   return (
     <ul aria-label="Files of the import">
       {results.map((result) => (
-        <ImportOutcome key={result.key} result={result} />
+        <ImportOutcome key={result.key} result={result} sending={sending} />
       ))}
       {items.map(({ files, label, words }) => {
         const reasons = files.flatMap((file) => {

@@ -4,8 +4,9 @@ import type { ImportResult } from "#app/lib/scan-import/results.ts";
 
 const LEVELS = { scan: "clear", measured: "clear", waits: "caution", already: null } as const;
 
-/** What came of a file, with a way back until it is used. */
-export function ImportOutcome({ result: { outcome, label, path, words, files, undo } }: { result: ImportResult }) {
+/** What came of a file, with a way back until it is used; not while others are on their way, one of which may be its partner. */
+export function ImportOutcome({ result, sending }: { result: ImportResult; sending: boolean }) {
+  const { outcome, label, path, words, files, undo } = result;
   const fetcher = useFetcher<{ outcome: "undone" | "used"; sentence: string }>();
   const busy = fetcher.state !== "idle";
   const said = busy ? undefined : fetcher.data;
@@ -34,7 +35,7 @@ export function ImportOutcome({ result: { outcome, label, path, words, files, un
         <button
           type="button"
           className="link min-h-6 flex-none self-start"
-          disabled={busy}
+          disabled={busy || sending}
           aria-label={`Undo the import: ${label}`}
           onClick={() => {
             void fetcher.submit(undo, { method: "post", action: "/scans/undo" });

@@ -79,7 +79,7 @@ export function ImportScreen({ programs, films, profiles }: Props) {
             <h2 id="batch-import" className="mb-1 font-semibold">
               {ready === 0 && results.length > 0 ? "Imported" : `${counted} to import`}
             </h2>
-            <ImportList plan={plan} results={results} refused={refused} />
+            <ImportList plan={plan} results={results} refused={refused} sending={sending !== null} />
             <div className="mt-3 flex flex-wrap items-center gap-3">
               <button type="submit" form={FORM} className="btn btn-primary" disabled={sending !== null || ready === 0}>
                 {sending !== null ? "Importing" : ready === 0 ? "Import" : `Import ${counted}`}
