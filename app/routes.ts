@@ -77,7 +77,11 @@ export default [
       route("files/:fileId", "routes/_app/scans/file.ts"),
       route(":scanId", "routes/_app/scans/scan.tsx"),
     ]),
-    route("wafers/:waferId", "routes/_app/wafers/wafer.tsx"),
+    ...prefix("wafers/:waferId", [
+      index("routes/_app/wafers/wafer.tsx"),
+      route("figures.csv", "routes/_app/wafers/figures-csv.ts"),
+      route("profiles.csv", "routes/_app/wafers/profiles-csv.ts"),
+    ]),
     ...prefix("instruments", [
       index("routes/_app/instruments/list.tsx"),
       route(":instrumentId", "routes/_app/instruments/instrument.tsx"),

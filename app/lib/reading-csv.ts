@@ -4,7 +4,7 @@ import type { ReadProfileFigures } from "#app/schemas/scan-reading.ts";
  * Profiles as a file that is read back without a question and without a change, to the last bit: positions and heights in metres,
  * a pair of columns each, blank where one profile is longer than the other.
  */
-export function profilesCsv(profiles: ReadProfileFigures[]): string {
+export function profilesCsv(profiles: Pick<ReadProfileFigures, "along" | "x" | "z">[]): string {
   const heads = profiles.flatMap(({ along }, n) => [
     `${along === "radius" ? "Radius" : "Position"} ${n + 1} [m]`,
     `Height ${n + 1} [m]`,
