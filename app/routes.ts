@@ -89,7 +89,11 @@ export default [
     ]),
     ...prefix("lots", [index("routes/_app/lots/list.tsx"), route(":lotId", "routes/_app/lots/lot.tsx")]),
     route("import-profiles", "routes/_app/import-profiles.tsx"),
-    route("wafers/:waferId", "routes/_app/wafers/wafer.tsx"),
+    ...prefix("wafers/:waferId", [
+      index("routes/_app/wafers/wafer.tsx"),
+      route("figures.csv", "routes/_app/wafers/figures-csv.ts"),
+      route("profiles.csv", "routes/_app/wafers/profiles-csv.ts"),
+    ]),
     ...prefix("instruments", [
       index("routes/_app/instruments/list.tsx"),
       route(":instrumentId", "routes/_app/instruments/instrument.tsx"),

@@ -5,7 +5,7 @@ import type { ReadProfileFigures } from "#app/schemas/scan-reading.ts";
  * in metres, a pair of columns each, blank where one profile is longer than the other. A remark above says of which the means are kept.
  * Nothing of the file's own words goes in, so no cell is a formula.
  */
-export function profilesCsv(profiles: ReadProfileFigures[]): string {
+export function profilesCsv(profiles: Pick<ReadProfileFigures, "along" | "x" | "z">[]): string {
   const heads = profiles.flatMap(({ along }, n) => [
     `${along === "radius" ? "Radius" : "Position"} ${n + 1} [m]`,
     `Height ${n + 1} [m]`,

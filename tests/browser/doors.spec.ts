@@ -80,6 +80,8 @@ const DOORS: Record<string, string> = {
   "/scans/files/:fileId": "302 404 200 200 200 200 404",
   "/scans/:scanId": "302 404 200 200 200 200 404",
   "/wafers/:waferId": "302 404 200 200 200 200 404",
+  "/wafers/:waferId/figures.csv": "302 404 200 200 200 200 404",
+  "/wafers/:waferId/profiles.csv": "302 404 200 200 200 200 404",
   "/instruments": "302 403 200 200 200 200 200",
   "/instruments/:instrumentId": "302 403 200 200 200 200 200",
   "/instruments/:instrumentId/study": "302 403 200 200 200 200 403",

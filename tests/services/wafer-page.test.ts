@@ -1,4 +1,7 @@
 import { beforeAll, describe, expect, test } from "vitest";
+import { profilesCsv } from "#app/lib/reading-csv.ts";
+import { readScanFile } from "#app/lib/scan-reading/scan-reader.ts";
+import { waferFiguresCsv } from "#app/lib/wafer-figures-csv.ts";
 import type { ActorScope } from "#app/server/scope.server.ts";
 import type { WaferPage } from "#app/schemas/wafer-page.ts";
 import { leave, scopeOfPerson } from "#tests/db/people.ts";
@@ -55,6 +58,22 @@ describe("a wafer scanned along four lines", () => {
     expect((bow?.value.value ?? 0) / (-directions.change.mean.value * r * r * 0.5)).toBeCloseTo(1, 2);
     expect(analysis.mistakes).toHaveLength(16);
     expect(analysis.mistakes.filter(({ state }) => state === "seen")).toEqual([]);
+  });
+
+  test("gives its matched profiles as a file that reads back without a change, and its figures", async () => {
+    const { getWaferProfiles } = await pages();
+    const { csv } = await getWaferProfiles(technician, waferId, null);
+    const read = readScanFile(new TextEncoder().encode(csv), "again.csv");
+    if (read.outcome !== "read" || read.content.kind !== "profiles") throw new Error("the file asks a question");
+    expect(read.content.profiles).toHaveLength(8);
+    expect(profilesCsv(read.content.profiles.map(({ along, x, z }) => ({ along, x: [...x], z: [...z] })))).toBe(csv);
+    const { film } = await page();
+    if (!film?.analysis) throw new Error("no film");
+    const lines = waferFiguresCsv("M-0412", "Polymer dielectric A", film.analysis).trim().split("\r\n");
+    expect(lines[1]).toBe(
+      `M-0412,Polymer dielectric A,film stress,thin-film relation,${film.analysis.stress.stoney.value},${film.analysis.stress.stoney.uncertainty},Pa,tension positive`,
+    );
+    expect(lines.filter((line) => line.includes(",bow,"))).toHaveLength(3);
   });
 
   test("with the same scans under two films is asked for by film", async () => {

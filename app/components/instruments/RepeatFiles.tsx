@@ -6,7 +6,10 @@ import { MOST_REPEAT_FILES, REPEAT_FILE } from "#app/lib/repeat-files.ts";
 /** Several files to choose or to drop on the field. What cannot be taken is said as soon as they are chosen. */
 export function RepeatFiles({ field, again }: { field: FieldMetadata<string | undefined>; again: boolean }) {
   const [chosen, setChosen] = useState<{ words: string; fault: boolean } | null>(null);
-  const fault = chosen === null ? field.errors?.[0] : chosen.fault ? chosen.words : undefined;
+  // What the server said is about what was sent: it goes when others are chosen, until the server has said something again.
+  const [answered, setAnswered] = useState<string[]>();
+  const error = field.errors === answered ? undefined : field.errors?.[0];
+  const fault = error ?? (chosen?.fault ? chosen.words : undefined);
   const hint =
     chosen?.words ?? (again ? "Choose the files again." : "CSV or text; choose them all at once, or drop them here");
   return (
@@ -21,7 +24,10 @@ export function RepeatFiles({ field, again }: { field: FieldMetadata<string | un
         aria-invalid={fault ? true : undefined}
         aria-describedby={field.errorId}
         className="file:mr-3 file:cursor-pointer file:border-0 file:bg-transparent file:font-medium file:text-ink file:underline max-tablet:file:leading-8"
-        onChange={(event) => setChosen(said([...(event.currentTarget.files ?? [])]))}
+        onChange={(event) => {
+          setChosen(said([...(event.currentTarget.files ?? [])]));
+          setAnswered(field.errors);
+        }}
       />
       <small id={field.errorId} aria-live="polite">
         {fault ?? hint}

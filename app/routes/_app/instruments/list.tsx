@@ -9,7 +9,7 @@ import { readListParams } from "#app/lib/list-params.ts";
 import { mayOnSite } from "#app/policies/permissions.ts";
 import { newInstrumentSchema } from "#app/schemas/instrument.ts";
 import { scopeOf } from "#app/server/contexts.server.ts";
-import { readForm, saveProblem } from "#app/server/form.server.ts";
+import { readForm } from "#app/server/form.server.ts";
 import { withinPages } from "#app/server/list-page.server.ts";
 import { addInstrument, listInstruments } from "#app/services/instruments/list-instruments.server.ts";
 import type { Route } from "./+types/list";
@@ -23,12 +23,14 @@ export async function loader({ context, url }: Route.LoaderArgs) {
   return { page, mayCheck: mayOnSite(scope.actor, "check instruments") };
 }
 
+const TAKEN = "There is already an instrument of that name. Open it from the list, or choose another name.";
+
 export async function action({ request, context }: Route.ActionArgs) {
   const { submission } = await readForm(request, newInstrumentSchema);
   if (submission.status !== "success") return data({ lastResult: submission.reply() }, { status: 400 });
   const saved = await addInstrument(scopeOf(context), submission.value.name);
   if (saved.outcome === "saved") throw redirect(`/instruments/${saved.id}`);
-  return data({ lastResult: submission.reply(saveProblem(saved, "instrument") ?? {}) }, { status: 409 });
+  return data({ lastResult: submission.reply({ fieldErrors: { name: [TAKEN] } }) }, { status: 409 });
 }
 
 export default function Instruments({ loaderData, actionData }: Route.ComponentProps) {

@@ -17,7 +17,7 @@ export async function loader({ context, params, url }: Route.LoaderArgs) {
 }
 
 export default function Wafer({ loaderData: { wafer } }: Route.ComponentProps) {
-  const { name, slot, lot, program, film, films } = wafer;
+  const { id, name, slot, lot, program, film, films } = wafer;
   const place = [lot && `lot ${lot.name}`, slot !== null && `slot ${slot}`, program.name].filter(Boolean).join(", ");
   return (
     <>
@@ -25,7 +25,19 @@ export default function Wafer({ loaderData: { wafer } }: Route.ComponentProps) {
         title={name}
         crumbs={[{ name: "Scans", path: "/scans" }]}
         remark={place}
-        actions={film && <PrintButton />}
+        actions={
+          film && (
+            <>
+              <a href={`/wafers/${id}/figures.csv?film=${encodeURIComponent(film.key)}`} className="btn" download>
+                Figures as CSV
+              </a>
+              <a href={`/wafers/${id}/profiles.csv?film=${encodeURIComponent(film.key)}`} className="btn" download>
+                Profiles as CSV
+              </a>
+              <PrintButton />
+            </>
+          )
+        }
       />
       {film ? (
         <>
