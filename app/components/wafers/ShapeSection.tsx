@@ -45,21 +45,19 @@ export function ShapeSection({ shape, directions, azimuths }: Props) {
         <div>
           <dl>
             {figures.map(({ name, value, definition, source }) => (
-              <div key={name} className="border-t border-line py-2 first:border-0">
-                <div className="flex justify-between gap-4">
-                  <dt className="font-medium">{NAMES[name] ?? name}, k = 2</dt>
-                  <dd className="text-right font-medium">
-                    {noBreak(
-                      formatWithUncertainty(value.value, value.uncertainty, "length", {
-                        unit: "µm",
-                        sign: name.startsWith("bow"),
-                      }),
-                    )}
-                  </dd>
-                </div>
-                <p className="text-label text-quiet">
+              <div key={name} className="grid grid-cols-[1fr_auto] gap-x-4 border-t border-line py-2 first:border-0">
+                <dt className="font-medium">{NAMES[name] ?? name}, k = 2</dt>
+                <dd className="text-right font-medium">
+                  {noBreak(
+                    formatWithUncertainty(value.value, value.uncertainty, "length", {
+                      unit: "µm",
+                      sign: name.startsWith("bow"),
+                    }),
+                  )}
+                </dd>
+                <dd className="col-span-2 text-label text-quiet">
                   {definition} {source}.
-                </p>
+                </dd>
               </div>
             ))}
           </dl>
