@@ -205,9 +205,14 @@ test("lots stand beside the bow that their assessment took for granted, and scan
   const bows = await compare("of=bow&q=K-17");
   expect(bows.page.rows.map(({ name }) => name).toSorted()).toEqual(["K-17, slot 1", "K-17, slot 2"]);
   const stresses = await compare("of=stress");
-  expect(stresses.points).toMatchObject([
-    { name: "M-0388", group: "Polymer dielectric A", predicted: 30e6, measured: expect.closeTo(31e6, -6) },
-  ]);
+  expect(stresses.points).toContainEqual(
+    expect.objectContaining({
+      name: "M-0388",
+      group: "Polymer dielectric A",
+      predicted: 30e6,
+      measured: expect.closeTo(31e6, -6) as number,
+    }),
+  );
   expect(stresses.all?.sentence).toMatch(/agree/);
 }, 30_000);
 

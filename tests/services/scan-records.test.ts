@@ -236,15 +236,21 @@ describe("an import is undone", () => {
 
   test("not once it is used, and says by what", async () => {
     const id = scanOf(await both(76, 0));
-    await asOwner(database, "create table film_stress_value (id uuid primary key, scan_id uuid references scan (id))");
-    await asOwner(database, "grant select on film_stress_value to public");
-    await asOwner(database, "insert into film_stress_value values (gen_random_uuid(), ?)", [id]);
+    await asOwner(
+      database,
+      "update scan set film_id = (select id from film where name = 'Polymer dielectric A') where id = ?",
+      [id],
+    );
+    const { acceptScan, acceptance } = await import("#app/services/films/accept-scan.server.ts");
+    const owner = await scopeOfPerson(database, "process-owner");
+    const version = (await acceptance(owner, id)).film?.version ?? null;
+    const values = { reason: "Steady process", instrument: "", measuredAt: new Date("2026-11-20"), use: false };
+    expect((await acceptScan(owner, id, { version, values })).outcome).toBe("saved");
     const { undoScan } = await undoing();
     expect(await undoScan(technician, id, "leave")).toEqual({
       outcome: "used",
       sentence: "This scan is used: its stress stands in the history of its film. Take it out there first.",
     });
-    await asOwner(database, "drop table film_stress_value");
     const guest = await scopeOfPerson(database, "guest");
     await expect(undoScan(guest, id, "leave")).rejects.toMatchObject({ init: { status: 404 } });
   });

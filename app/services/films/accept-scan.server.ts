@@ -8,6 +8,7 @@ import type { Acceptance, AcceptedAs } from "#app/schemas/accept-scan.ts";
 import type { AcceptValues } from "#app/schemas/accept-form.ts";
 import { notFound } from "#app/server/problem.server.ts";
 import { inScope, type ActorScope } from "#app/server/scope.server.ts";
+import { analyseScans, FOR_ANALYSIS } from "../film-analysis/analyse-scans.server.ts";
 import { whereUsed } from "../library/use.server.ts";
 import { requireInProgram, requireOnSite } from "../permission.server.ts";
 import { conflictOf, saving, touch, type Saved } from "../record.server.ts";
@@ -15,13 +16,13 @@ import { idFrom } from "../uuid.server.ts";
 import { holdFilm, newValue, takeMean, usesMean, valuesOf } from "./film-values.server.ts";
 import { scanStress, type ScanStress } from "./scan-stress.ts";
 
-type WholeScan = Loaded<Scan, "program" | "film" | "result" | "createdBy" | "afterScan">;
+type WholeScan = Loaded<Scan, (typeof FOR_ANALYSIS)[number] | "program" | "createdBy" | "afterScan">;
 
 async function findScan(em: EntityManager, scope: ActorScope, id: string | undefined): Promise<WholeScan> {
   const scan = await em.findOne(
     Scan,
     { id: idFrom(id, "scan") },
-    { populate: ["program", "film", "result", "createdBy", "afterScan"] },
+    { populate: [...FOR_ANALYSIS, "program", "createdBy", "afterScan"] },
   );
   if (!scan) throw notFound("scan");
   requireInProgram(scope, "see the work", scan.program.id, "scan");
@@ -47,6 +48,11 @@ export async function acceptedAs(scope: ActorScope, scanId: string | undefined):
   });
 }
 
+async function stressOf(em: EntityManager, scan: WholeScan, film: Film): Promise<ScanStress | string> {
+  const { analysis } = await analyseScans(em, [scan as Scan]);
+  return scanStress(scan, scan.result.get(), film, analysis?.stress ?? null);
+}
+
 const NO_FILM = "No film of the library is named for this scan, so there is no history that it could go into.";
 
 const readingOf = (stress: ScanStress, at: Date): MeanReading => ({ ...stress, measuredAt: at, state: "accepted" });
@@ -68,7 +74,7 @@ export async function acceptance(scope: ActorScope, scanId: string | undefined):
     const film = scan.film as Film;
     const own = await em.findOne(FilmStressValue, { scan }, { populate: ["acceptedBy"] });
     const refused = own ? alreadyWords(own) : null;
-    const stress = scanStress(scan, scan.result.get(), film);
+    const stress = await stressOf(em, scan, film);
     const named = {
       id: film.id,
       name: film.name,
@@ -120,7 +126,7 @@ export async function acceptScan(
       if (own) return { outcome: "refused", reason: alreadyWords(own) };
       const conflict = conflictOf(film, version);
       if (conflict) return { outcome: "conflict", conflict };
-      const stress = scanStress(scan, scan.result.get(), film);
+      const stress = await stressOf(em, scan, film);
       if (typeof stress === "string") return { outcome: "refused", reason: stress };
       em.create(FilmStressValue, {
         ...newValue(scope, values, stress),

@@ -3,6 +3,7 @@ import type { Film } from "#app/db/entities/film.ts";
 import { EngineInputError } from "#app/engine/errors.ts";
 import { stressBothWays } from "#app/engine/profile/stress/full-model.ts";
 import { formatQuantity } from "#app/engine/units/format.ts";
+import type { BothStresses } from "#app/schemas/film-analysis.ts";
 import type { ScanResult } from "#app/schemas/scan-result.ts";
 
 /** What a scan would give its film's history, SI. */
@@ -14,17 +15,22 @@ export interface ScanStress {
   remark: string | null;
 }
 
+/** Of an expanded uncertainty. */
+const COVERAGE = 2;
 /** What silicon's modulus adds is the same in every scan. */
 const SHARED = "biaxial modulus";
 
 /**
  * The stress of a scan that a film's history takes: by the thin-film relation, or by the full model where the two differ by more
  * than 1 %. A sentence where there is none to take.
+ * @param analysed what the scan's page says of it, whose uncertainty holds the instrument's repeatability too; null where it says
+ *   nothing, which leaves the uncertainty that the scan was stored with
  */
 export function scanStress(
   { parameters }: Pick<Scan, "parameters">,
   result: ScanResult,
   film: Pick<Film, "youngsModulus" | "poissonsRatio">,
+  analysed: BothStresses | null,
 ): ScanStress | string {
   if (result.curled) return "The wafer has rolled up, so this scan gives no stress. Scan it on thicker silicon.";
   if (!(result.stressUncertainty > 0)) return "The scan has no uncertainty, so it cannot be weighed against others.";
@@ -42,9 +48,10 @@ export function scanStress(
     const value = both.differs ? both.full : result.stress;
     const scale = result.stress === 0 ? 1 : Math.abs(value / result.stress);
     const shared = result.budget.find(({ input }) => input === SHARED)?.contribution ?? 0;
+    const said = both.differs ? analysed?.full : analysed?.stoney;
     return {
       value,
-      standardUncertainty: scale * result.stressUncertainty,
+      standardUncertainty: said ? said.uncertainty / COVERAGE : scale * result.stressUncertainty,
       commonUncertainty: scale * shared,
       remark: both.differs ? fullModelRemark(result.stress, value) : null,
     };
