@@ -18,12 +18,20 @@ export async function loader({ context, params, url }: Route.LoaderArgs) {
 
 export default function Wafer({ loaderData: { wafer } }: Route.ComponentProps) {
   const { id, name, slot, lot, program, film, films } = wafer;
-  const place = [lot && `lot ${lot.name}`, slot !== null && `slot ${slot}`, program.name].filter(Boolean).join(", ");
+  const place = [slot !== null && `slot ${slot}`, program.name].filter(Boolean).join(", ");
   return (
     <>
       <PageHead
         title={name}
-        crumbs={[{ name: "Scans", path: "/scans" }]}
+        crumbs={[
+          { name: "Scans", path: "/scans" },
+          ...(lot
+            ? [
+                { name: "Lots", path: "/lots" },
+                { name: `Lot ${lot.name}`, path: `/lots/${lot.id}` },
+              ]
+            : []),
+        ]}
         remark={place}
         actions={
           film && (
@@ -54,7 +62,8 @@ export default function Wafer({ loaderData: { wafer } }: Route.ComponentProps) {
           }
         >
           A scan before a film and one after it on the same line make a measurement. Three lines, 60 degrees apart, make
-          a map of the wafer with its bow, warp and sori.
+          a map of the wafer with its bow, warp and sori.{" "}
+          {lot && "What was measured of the lot stands on the lot’s page."}
         </EmptyState>
       )}
     </>
