@@ -63,7 +63,10 @@ test(
 
     const next = startWorker();
     await expect.poll(() => stateOf(id), { timeout: 45_000, interval: 100 }).toBe("done");
-    const readings = await asOwner(database, "select 1 from scan_reading");
+    const readings = await asOwner(
+      database,
+      "select 1 from scan_reading reading join scan_file file on file.id = reading.file_id where file.name ~ '^[0-9]+\\.csv$'",
+    );
     expect(readings).toHaveLength(2);
     next.kill("SIGTERM");
     const [code] = (await once(next, "exit")) as [number | null];
