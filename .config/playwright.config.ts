@@ -8,6 +8,9 @@ export default defineConfig({
   testDir: "../tests/browser",
   outputDir: "../test-results",
   workers: 2,
+  // Two browsers, the server and its database share what may be two slow cores: time here says that something hangs, not how fast it is.
+  timeout: 90_000,
+  expect: { timeout: 15_000 },
   retries: 0,
   forbidOnly: true,
   use: {
