@@ -175,10 +175,10 @@ test.describe("without scripts", () => {
     await signIn(page, "technician");
     const label = ownLabel();
     await fillForm(page, label);
-    await fileBefore(page).setInputFiles(csv("large.csv", Buffer.alloc(9 * 1024 * 1024, "1.5,2.5\n")));
+    await fileBefore(page).setInputFiles(csv("large.csv", Buffer.alloc(49 * 1024 * 1024, "1.5,2.5\n")));
     await fileAfter(page).setInputFiles(AFTER);
     await readAndKeep(page);
-    await expect(await below(page, "File before the film")).toContainText(/large\.csv has 9\.0.MB/);
+    await expect(await below(page, "File before the film")).toContainText(/large\.csv has 49\.0.MB/);
     await expect(page.getByText("Choose the two files again")).toBeVisible();
     await expect(page.getByLabel("Film thickness")).toHaveValue("5 um");
     await fileBefore(page).setInputFiles(BEFORE);
