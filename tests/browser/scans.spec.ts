@@ -172,6 +172,8 @@ test.describe("without scripts", () => {
   test.use({ javaScriptEnabled: false, refusals: true });
 
   test("the upload works, refuses at the field and keeps what was typed", async ({ page }) => {
+    // 49 MB go through the browser.
+    test.slow();
     await signIn(page, "technician");
     const label = ownLabel();
     await fillForm(page, label);

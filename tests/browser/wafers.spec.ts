@@ -57,6 +57,9 @@ test.describe("a wafer scanned along four lines", () => {
     await page.getByRole("link", { name: "M-0412, lot T-2611, slot 3, 45°" }).click();
     await expect(page.getByRole("heading", { level: 2, name: "Mistakes looked for" })).toBeVisible({ timeout: 10_000 });
     await expect(page.getByText(/The repeatability is that of Stylus 1\./)).toBeVisible();
-    await expect(page.getByRole("link", { name: "M-0412, lot T-2611, slot 3", exact: true })).toHaveAttribute("href", /^\/wafers\//);
+    await expect(page.getByRole("link", { name: "M-0412, lot T-2611, slot 3", exact: true })).toHaveAttribute(
+      "href",
+      /^\/wafers\//,
+    );
   });
 });
