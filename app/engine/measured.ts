@@ -19,9 +19,10 @@ export interface Measured {
  * Standard uncertainty of a stated value: tolerance/√3, the rectangular distribution of JCGM 100:2008 4.3.7, when only an
  * interval is known. Zero when no tolerance was given, which rules report on their own.
  */
-export function standardUncertainty(measured: Measured): number {
-  return measured.tolerance === null ? 0 : measured.tolerance / Math.sqrt(3);
-}
+export const standardUncertainty = ({ tolerance }: Measured): number => fromTolerance(tolerance);
+
+/** Standard uncertainty of a tolerance by itself, in its unit: that of a stated value with it. */
+export const fromTolerance = (tolerance: number | null): number => (tolerance === null ? 0 : tolerance / Math.sqrt(3));
 
 /** Where a value comes from, in words: 'supplier', or 'assumed, common practice, no source'. */
 export function provenance({ source, note }: Measured): string {

@@ -1,3 +1,4 @@
+import { fromTolerance } from "#app/engine/measured.ts";
 import { filmStressFromScans, type FilmStressFromScans } from "#app/engine/profile/film-stress.ts";
 import { fittedHeight, levelHeight } from "#app/engine/profile/fitted-height.ts";
 import { smallDeflection } from "#app/engine/profile/small-deflection.ts";
@@ -11,9 +12,6 @@ import type { ScanSubject } from "#app/schemas/scan.ts";
 /** Points that a plot of this width can show. */
 const DRAWN_POINTS = 400;
 const SHOWN_POSITIONS = 12;
-
-/** Standard uncertainty of a stated interval: rectangular, JCGM 100:2008 4.3.7. */
-const fromTolerance = (tolerance: number | null) => (tolerance ?? 0) / Math.sqrt(3);
 
 /**
  * Film stress of a pair of profiles, with its uncertainty and the curves to draw.

@@ -1,11 +1,10 @@
+import { COVERAGE } from "#app/lib/scan-answer.ts";
 import { formatQuantity } from "#app/engine/units/format.ts";
 import type { StressChart } from "#app/schemas/film-stress.ts";
 import type { Plot, PlotAxis, PlotPoint, PlotSeries } from "./plot.ts";
 import { multiples, niceStep, signedTick } from "./plot-ticks.ts";
 
 const MPA = 1e6;
-/** Bars of the uncertainty reach this many standard uncertainties. */
-const COVERAGE = 2;
 const ROOM = 0.06;
 
 const stressText = (value: number, sign = true) =>

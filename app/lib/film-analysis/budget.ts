@@ -1,3 +1,4 @@
+import { fromTolerance } from "#app/engine/measured.ts";
 import { fitAzimuths } from "#app/engine/profile/azimuths.ts";
 import {
   stressBudget,
@@ -10,8 +11,6 @@ import type { FilmSubject, PlacedPair } from "./pair-points.ts";
 
 /** Degrees of freedom from which on the coverage factor is 2.00. */
 const MANY = 1000;
-
-const fromTolerance = (tolerance: number | null) => (tolerance ?? 0) / Math.sqrt(3);
 
 /**
  * Input of the engine's budget for the mean of some pairs, one on each line. What the pairs have each for themselves shrinks in their

@@ -1,3 +1,4 @@
+import { fromTolerance } from "#app/engine/measured.ts";
 import { findMistakes } from "#app/engine/profile/mistakes/find-mistakes.ts";
 import type { MistakeFinding } from "#app/engine/profile/mistakes/mistake.ts";
 import type { CalendarDay, CheckedScan, Estimate, ScanChecks } from "#app/engine/profile/mistakes/scan-checks.ts";
@@ -5,8 +6,6 @@ import { stoneyCurvature } from "#app/engine/stoney/stoney.ts";
 import type { MistakeView } from "#app/schemas/film-analysis.ts";
 import { changeUncertainty, readingsOf } from "./directions.ts";
 import type { FilmSubject, PlacedPair, PlacedPoints } from "./pair-points.ts";
-
-const fromTolerance = (tolerance: number) => tolerance / Math.sqrt(3);
 
 /** What each check says of all pairs together: what was seen in one of them was seen. */
 export function mistakesIn(pairs: readonly PlacedPair[], subject: FilmSubject, today: CalendarDay): MistakeView[] {

@@ -3,6 +3,7 @@ import type { Film } from "#app/db/entities/film.ts";
 import { EngineInputError } from "#app/engine/errors.ts";
 import { stressBothWays } from "#app/engine/profile/stress/full-model.ts";
 import { formatQuantity } from "#app/engine/units/format.ts";
+import { COVERAGE } from "#app/lib/scan-answer.ts";
 import type { BothStresses } from "#app/schemas/film-analysis.ts";
 import type { ScanResult } from "#app/schemas/scan-result.ts";
 
@@ -15,8 +16,6 @@ export interface ScanStress {
   remark: string | null;
 }
 
-/** Of an expanded uncertainty. */
-const COVERAGE = 2;
 /** What silicon's modulus adds is the same in every scan. */
 const SHARED = "biaxial modulus";
 
