@@ -2,7 +2,8 @@ import { defineConfig } from "@playwright/test";
 
 /**
  * Browser tests, against the production build that `npm test` serves: BASE_URL says where, DEMO_ACCOUNTS_FILE names the
- * JSON file of the demo accounts, DATABASE_OWNER_URL is the way around its walls. The browser is Debian's.
+ * JSON file of the demo accounts, DATABASE_OWNER_URL is the way around its walls. The browser is
+ * Debian's without its window, which takes a third of its time.
  */
 export default defineConfig({
   testDir: "../tests/browser",
@@ -15,9 +16,9 @@ export default defineConfig({
   forbidOnly: true,
   use: {
     baseURL: process.env["BASE_URL"],
-    trace: "retain-on-failure",
+    // Traces cost a third of the time; `npx playwright test --trace on` makes one of a test that needs it.
     launchOptions: {
-      executablePath: "/usr/bin/chromium",
+      executablePath: "/usr/bin/chromium-headless-shell",
       args: [
         "--disable-gpu",
         "--disable-background-networking",

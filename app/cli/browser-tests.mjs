@@ -14,8 +14,8 @@ import { tallyPlaywright } from "./tally.mjs";
 import { accessTo, templateName } from "./test-database.mjs";
 import { keepWorker } from "./worker.mjs";
 
-/** Debian's browser: Playwright does not bring one of its own here. */
-const chromium = "/usr/bin/chromium";
+/** Debian's browser without its window: Playwright does not bring one of its own here. */
+const chromium = "/usr/bin/chromium-headless-shell";
 
 const databaseName = "planeward_browser";
 
@@ -86,7 +86,7 @@ export async function runBrowserTests(checks, { folder, database, filters }) {
   let failed = 0;
   try {
     ({ failed } = await checks.count("playwright", async () => {
-      if (!existsSync(chromium)) await installDebianPackages(keeper, "Chromium", ["chromium"]);
+      if (!existsSync(chromium)) await installDebianPackages(keeper, "Chromium", ["chromium-headless-shell"]);
       if (!database || built.failed) throw new Sentence("No browser test was run: there is nothing to run it against.");
       return runPlaywright(checks, { folder, database, filters });
     }));

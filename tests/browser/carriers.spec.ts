@@ -1,5 +1,5 @@
 import type { Locator, Page } from "@playwright/test";
-import { expect, expectNoAxeFindings, signIn, test } from "./support.ts";
+import { expect, expectNoAxeFindings, signIn, signInAtToday, test } from "./support.ts";
 
 const LISTS = ["carriers", "bonding-materials", "tapes", "silicon", "tools"];
 
@@ -18,7 +18,7 @@ async function openRecord(page: Page, list: string, name: string): Promise<void>
 }
 
 test("the place opens on carriers and leads to every kind, in the order of its row", async ({ page }) => {
-  await signIn(page, "technician");
+  await signInAtToday(page, "technician");
   await page.getByRole("navigation", { name: "Places" }).getByRole("link", { name: "Carriers & bonds" }).click();
   await expect(page).toHaveURL(/\/carriers\/carriers$/);
   const row = page.getByRole("navigation", { name: "Carriers and bonds" });
@@ -335,7 +335,7 @@ test.describe("who may do what", () => {
     });
 
   test("a guest gets none of it", async ({ page }) => {
-    await signIn(page, "guest");
+    await signInAtToday(page, "guest");
     await expect(page.getByRole("link", { name: "Carriers & bonds" })).toHaveCount(0);
     for (const address of ["/carriers", "/carriers/limits", ...LISTS.map((list) => `/carriers/${list}`)])
       expect((await page.goto(address))?.status()).toBe(403);

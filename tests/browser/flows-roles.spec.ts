@@ -1,6 +1,6 @@
 import type { Page } from "@playwright/test";
 import { assess, LIST, ownFlow, press, stackId, steps, TERN } from "./flow-pages.ts";
-import { expect, expectNoAxeFindings, signIn, test } from "./support.ts";
+import { expect, expectNoAxeFindings, signIn, signInAtToday, test } from "./support.ts";
 
 test.describe("roles", () => {
   test.use({ refusals: true });
@@ -42,7 +42,7 @@ test.describe("roles", () => {
     await engineer.goto(LIST);
     const path = await engineer.getByRole("link", { name: TERN, exact: true }).getAttribute("href");
     await engineer.close();
-    await signIn(page, "guest");
+    await signInAtToday(page, "guest");
     await expect(page.getByRole("link", { name: "Flows" })).toHaveCount(0);
     expect((await page.request.get("/flows")).status()).toBe(403);
     expect((await page.request.get(path ?? "")).status()).toBe(404);

@@ -1,7 +1,7 @@
-import { expect, expectNoAxeFindings, signIn, test } from "./support.ts";
+import { expect, expectNoAxeFindings, signIn, signInAtToday, test } from "./support.ts";
 
 test("the method page leads to equations, rules, cautions and words by their anchors", async ({ page }) => {
-  await signIn(page, "engineer");
+  await signInAtToday(page, "engineer");
   await page.getByRole("link", { name: "Method", exact: true }).click();
   const nav = page.getByRole("navigation", { name: "On this page" });
   for (const name of ["Handling rules", "Equations", "What is left out", "Cautions", "Glossary", "Sources"]) {

@@ -1,7 +1,7 @@
 import { readFileSync, truncateSync, writeFileSync } from "node:fs";
 import { fileURLToPath } from "node:url";
 import { below, fileAfter, fileBefore, fillForm, ownLabel, readAndKeep } from "./scan-form.ts";
-import { expect, expectNoAxeFindings, signIn, test } from "./support.ts";
+import { expect, expectNoAxeFindings, signIn, signInAtToday, test } from "./support.ts";
 
 const fixture = (name: string) => fileURLToPath(new URL(`../../fixtures/scans/${name}`, import.meta.url));
 const BEFORE = fixture("monitor-200mm-725um-before-film-seed-7.csv");
@@ -206,7 +206,7 @@ test.describe("who may not", () => {
     const file = await technician.getByRole("link", { name: /before-film/ }).getAttribute("href");
     await technician.close();
 
-    await signIn(page, "guest");
+    await signInAtToday(page, "guest");
     await expect(page.getByRole("link", { name: "Scans" })).toHaveCount(0);
     for (const [path, status] of [
       ["/scans", 403],
@@ -222,7 +222,7 @@ test.describe("who may not", () => {
   });
 
   test("a body that is no form of ours is refused, not failed", async ({ page }) => {
-    await signIn(page, "engineer");
+    await signInAtToday(page, "engineer");
     const headers = { origin: new URL(page.url()).origin };
     for (const options of [
       { headers: { ...headers, "content-type": "application/json" }, data: "{}" },

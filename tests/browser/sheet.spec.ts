@@ -1,6 +1,6 @@
 import type { Page } from "@playwright/test";
 import { assessTern, TERN } from "./assess.ts";
-import { expect, expectNoAxeFindings, signIn, test } from "./support.ts";
+import { expect, expectNoAxeFindings, signIn, signInAtToday, test } from "./support.ts";
 
 /** How many pages a print of what is open has. */
 async function printedPages(page: Page): Promise<number> {
@@ -106,7 +106,7 @@ test.describe("others", () => {
     const path = (await assessTern(page)).replace("assessments", "sheets");
     const context = await browser.newContext();
     const guest = await context.newPage();
-    await signIn(guest, "guest");
+    await signInAtToday(guest, "guest");
     await guest.getByRole("link", { name: "Sheets", exact: true }).click();
     await expect(guest.getByRole("heading", { name: "No sheet has been released to you yet" })).toBeVisible();
     await expect(guest.getByText("TERN-A")).toHaveCount(0);

@@ -1,4 +1,4 @@
-import { accountOf, expect, expectNoAxeFindings, signIn, test } from "./support.ts";
+import { accountOf, expect, expectNoAxeFindings, signInAtToday, test } from "./support.ts";
 
 test("the door leads back to the page that was asked for", async ({ page }) => {
   const { email, password } = accountOf("engineer");
@@ -39,7 +39,7 @@ test.describe("a wrong password", () => {
 });
 
 test("signing out shuts every page again", async ({ page }) => {
-  await signIn(page, "engineer");
+  await signInAtToday(page, "engineer");
   await page.getByRole("button", { name: "Sign out" }).click();
   await expect(page).toHaveURL(/\/sign-in$/);
   await page.goto("/films");
@@ -50,7 +50,7 @@ test.describe("without JavaScript", () => {
   test.use({ javaScriptEnabled: false });
 
   test("one signs in, sees the films and signs out", async ({ page }) => {
-    await signIn(page, "technician");
+    await signInAtToday(page, "technician");
     await page.getByRole("link", { name: "Films" }).click();
     await expect(page.getByRole("table")).toBeVisible();
     await page.getByRole("button", { name: "Sign out" }).click();

@@ -223,6 +223,26 @@ test.describe("an engineer", () => {
     await expect(page.getByRole("link", { name: `Copy of ${name}` })).toHaveCount(0);
   });
 
+  test("keeps what was typed before the scripts came", async ({ page }) => {
+    const { path } = await makeStack(page, "early");
+    let come = () => {};
+    const held = new Promise<void>((resolve) => (come = resolve));
+    await page.route("**/assets/entry.client-*.js", async (route) => {
+      await held;
+      await route.continue();
+    });
+    await page.goto(path, { waitUntil: "commit" });
+    await field(page, "siliconThickness.value").fill("150 µm");
+    await field(page, "layers[0].cut").selectOption({ label: "Patterned in lines" });
+    await expect(answerOf(page)).toContainText("At 200 µm it");
+    come();
+    await expect(field(page, "layers[0].lineWidth")).toBeVisible();
+    await field(page, "layers[0].cut").selectOption({ label: "Whole film" });
+    await expect(answerOf(page)).toContainText("At 150 µm it");
+    await page.getByRole("link", { name: "Copy" }).click();
+    await expect(page.getByRole("dialog", { name: "Leave without saving?" })).toBeVisible();
+  });
+
   test("filters by program, and finds nothing in plain words", async ({ page }) => {
     await page.goto("/stacks?program=petrel");
     await expect(page.getByRole("link", { name: "Petrel P-3, back-side metal" })).toBeVisible();

@@ -1,8 +1,8 @@
-import { expect, expectNoAxeFindings, signIn, test } from "./support.ts";
+import { expect, expectNoAxeFindings, signInAtToday, test } from "./support.ts";
 
 for (const role of ["engineer", "process owner", "shift lead", "technician"] as const)
   test(`a ${role} sees what waits, the newest scans and the programs`, async ({ page }) => {
-    await signIn(page, role);
+    await signInAtToday(page, role);
     await expect(page.getByRole("heading", { level: 1, name: "Today" })).toBeVisible();
     await expect(page.getByText(/\d{4}-\d\d-\d\d, \d\d:\d\d UTC/)).toBeVisible();
     const programs = page.getByRole("table", { name: "Your programs" });
@@ -13,13 +13,13 @@ for (const role of ["engineer", "process owner", "shift lead", "technician"] as 
   });
 
 test("counts lead to the lists of that program", async ({ page }) => {
-  await signIn(page, "engineer");
+  await signInAtToday(page, "engineer");
   await page.getByRole("link", { name: /^\d+ stacks of Petrel$/ }).click();
   await expect(page).toHaveURL(/\/stacks\?program=petrel$/);
 });
 
 test("a guest sees their program and nothing of the others", async ({ page }) => {
-  await signIn(page, "guest");
+  await signInAtToday(page, "guest");
   await expect(page.getByText("No sheet has been released to you yet.")).toBeVisible();
   const main = page.getByRole("main");
   await expect(main).toContainText("Tern");
@@ -30,12 +30,12 @@ test("a guest sees their program and nothing of the others", async ({ page }) =>
 for (const scheme of ["light", "dark"] as const)
   test(`axe finds nothing on Today, ${scheme}`, async ({ page }) => {
     await page.emulateMedia({ colorScheme: scheme });
-    await signIn(page, "engineer");
+    await signInAtToday(page, "engineer");
     await expectNoAxeFindings(page);
   });
 
 test("nothing is wider than a small phone", async ({ page }) => {
   await page.setViewportSize({ width: 320, height: 640 });
-  await signIn(page, "engineer");
+  await signInAtToday(page, "engineer");
   expect(await page.evaluate(() => document.documentElement.scrollWidth)).toBeLessThanOrEqual(320);
 });

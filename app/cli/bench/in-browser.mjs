@@ -2,7 +2,7 @@ import { existsSync } from "node:fs";
 import { chromium } from "@playwright/test";
 import { bundled } from "./bundle.mjs";
 
-const CHROMIUM = "/usr/bin/chromium";
+const CHROMIUM = "/usr/bin/chromium-headless-shell";
 
 /**
  * The chart's sweep in a real browser: 200 thicknesses of each stack, shape included.
