@@ -1,8 +1,9 @@
 import type { JobRow } from "#app/schemas/job.ts";
-import { filesOf, scanOf } from "./job-files.ts";
+import { filesOf, pageOf } from "./job-files.ts";
 
 /** A job as the API gives it. Each file that was read names the address of what it says. */
 export function jobJson({ id, state, done, total, unit, sentence, outcome, createdAt, startedAt, endedAt }: JobRow) {
+  const page = pageOf(outcome);
   return {
     id,
     state,
@@ -13,7 +14,7 @@ export function jobJson({ id, state, done, total, unit, sentence, outcome, creat
     created_at: createdAt,
     started_at: startedAt,
     ended_at: endedAt,
-    ...(scanOf(outcome) === null ? {} : { page: `/scans/${scanOf(outcome)}` }),
+    ...(page === null ? {} : { page }),
     files: filesOf(outcome).map((each) => ({
       name: each.name,
       outcome: each.outcome,

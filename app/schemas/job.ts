@@ -1,3 +1,4 @@
+import type { FileValues, KeptFile } from "./scan-import.ts";
 import type { ReadingSettings } from "./scan-reading.ts";
 import type { ScanValues } from "./scan.ts";
 
@@ -20,6 +21,10 @@ export interface JobKinds {
   "scan pair": {
     input: { values: ScanValues; files: { before: StoredFile; after: StoredFile } };
     outcome: { scan: string };
+  };
+  "file import": {
+    input: { values: FileValues; file: StoredFile };
+    outcome: { kept: KeptFile };
   };
 }
 export type JobKind = keyof JobKinds;

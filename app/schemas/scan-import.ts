@@ -1,5 +1,6 @@
 import { z } from "zod";
 import { importProfileSchema } from "./import-profile.ts";
+import type { JobState } from "./job.ts";
 import { optionalQuantity, quantity } from "./quantity.ts";
 import { RULES } from "./ranges.ts";
 import { scanSchema } from "./scan.ts";
@@ -64,6 +65,9 @@ export const profileFileSchema = fileShape.extend({
 export type TableFileValues = z.output<typeof tableFileSchema>;
 export type ProfileFileValues = z.output<typeof profileFileSchema>;
 
+/** What is said of a file of an import. */
+export type FileValues = TableFileValues | ProfileFileValues;
+
 /** Who brought the same in before, and when (ISO). */
 export interface BroughtInBefore {
   by: string;
@@ -79,8 +83,8 @@ export type PlacedProfile = { label: string } &
     | { outcome: "already"; before: BroughtInBefore; scan: string | null; waferScan: string }
   );
 
-/** What the server answers to a file of an import. */
-export type FileAnswer =
+/** What came of a file of an import that is in. */
+export type KeptFile =
   | { outcome: "placed"; placed: PlacedProfile[] }
   | {
       outcome: "measured";
@@ -90,10 +94,27 @@ export type FileAnswer =
       wafers: number;
       lots: { id: string; name: string }[];
     }
-  | { outcome: "known table"; reading: string; before: BroughtInBefore }
+  | { outcome: "known table"; reading: string; before: BroughtInBefore };
+
+/** What the server answers to a file of an import. */
+export type FileAnswer =
+  | KeptFile
+  /** it is large: the id of the job that reads it */
+  | { outcome: "job"; job: string }
   | { outcome: "refused"; reason: string }
   /** by field: what is wrong with what all files of the batch share */
   | { outcome: "fields"; errors: Record<string, string[]> };
+
+/** How a job stands that reads a large file of an import, for the screen that waits for it. */
+export interface FileUnderWay {
+  state: JobState;
+  /** bytes read, of those that there are */
+  done: number;
+  total: number;
+  sentence: string;
+  /** what came of it; null until it is done */
+  kept: KeptFile | null;
+}
 
 /** What came of keeping an import profile: its name, or what stands in the way. */
 export interface KeptAnswer {

@@ -54,17 +54,26 @@ export async function keepScanFileAlone(scope: ActorScope, programId: string, fi
   }
 }
 
+/** So many bytes of a file from a place on, fewer at its end. */
+export type Pieces = (from: number, length: number) => Promise<Uint8Array>;
+
 /**
- * So many bytes of a stored file from a place on, fewer at its end.
+ * A stored file piece by piece, within a transaction that is open already.
  * @throws 404 for a file that is not there or of another program
  */
-export function scanFilePiece(scope: ActorScope, id: string, from: number, length: number): Promise<Uint8Array> {
-  return inScope(scope, async (em) => {
+export const piecesWithin =
+  (em: EntityManager, id: string): Pieces =>
+  async (from, length) => {
     const [row] = await em.execute<{ piece: Uint8Array }[]>(
       "select substring(bytes from ? for ?) as piece from scan_file where id = ?",
       [from + 1, length, id],
     );
     if (!row) throw notFound("scan file");
     return row.piece;
-  });
-}
+  };
+
+/** The same, each piece in a transaction of its own, so that none stays open while a large file is read. */
+export const piecesOf =
+  (scope: ActorScope, id: string): Pieces =>
+  (from, length) =>
+    inScope(scope, (em) => piecesWithin(em, id)(from, length));

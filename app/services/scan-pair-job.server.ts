@@ -12,7 +12,7 @@ import { enqueueOnce } from "./jobs/enqueue.server.ts";
 import { JobRefused, type Tell } from "./jobs/progress.server.ts";
 import type { Worked } from "./jobs/run-job.server.ts";
 import { requireInProgram } from "./permission.server.ts";
-import { keepScanFileAlone } from "./scan-files.server.ts";
+import { keepScanFileAlone, piecesOf } from "./scan-files.server.ts";
 import { pairRefusal, pairResult, type PairedProfile } from "./scan-pair.ts";
 import { readInPieces } from "./scan-readings/read-in-pieces.server.ts";
 import { storeScan, type Refused, type ScanFiles } from "./scan-upload.server.ts";
@@ -110,7 +110,8 @@ async function pairedProfile(
 
 async function readProfile(scope: ActorScope, file: ScanFile, values: ScanValues, tell: Tell): Promise<ReadProfile> {
   const profile = statedProfile(values);
-  const read = await readInPieces(scope, file, profile, tell);
+  const pieces = piecesOf(scope, file.id);
+  const read = await readInPieces(pieces, file, profile, tell);
   const unheaded = unheadedProfile(read, profile);
-  return onlyProfile(unheaded ? await readInPieces(scope, file, unheaded, tell) : read, file.name);
+  return onlyProfile(unheaded ? await readInPieces(pieces, file, unheaded, tell) : read, file.name);
 }

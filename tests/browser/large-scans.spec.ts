@@ -45,12 +45,33 @@ test.describe("a pair beyond a megabyte", () => {
     await expect(job).toContainText("The pair is in.", { timeout: 60_000 });
     await expect(page.getByText("every point of it is fitted")).toBeVisible();
     await expectNoAxeFindings(page);
-    await job.getByRole("link", { name: "Open the scan" }).click();
+    await job.getByRole("link", { name: "Open it" }).click();
     await page.waitForURL(/\/scans\/[0-9a-f-]{36}$/, { timeout: 15_000 });
     await expect(page.getByRole("heading", { level: 1, name: label })).toBeVisible();
     await expect(page.getByText("60000 of 60000 rows read").first()).toBeVisible();
     await expect(page.getByText("The fit was given every point").first()).toBeVisible();
   });
+});
+
+test("large files of a batch are read in the background while the page tells how far they are", async ({ page }) => {
+  await signIn(page, "technician");
+  await page.goto("/scans/import");
+  const wafer = `M-${Math.random().toString(10).slice(2, 9)}`;
+  await page
+    .getByLabel("Or choose files")
+    .setInputFiles([largeScan(`${wafer}_az000_pre.csv`, 0.002), largeScan(`${wafer}_az000_post.csv`, 0.003)]);
+  await page.getByLabel("Program", { exact: true }).selectOption({ label: "Tern" });
+  await page.getByLabel("Film thickness").fill("5 um");
+  await page.getByLabel("Silicon thickness").fill("725 um");
+  await page.getByLabel("Diameter").fill("200 mm");
+  await page.getByRole("button", { name: "Import 2 files" }).click();
+  await expect(page.getByText(/is large: .* of 1\.\d MB read\. It goes on when you leave/)).toBeVisible();
+  await expect(page.getByText("2 imported.")).toBeVisible({ timeout: 60_000 });
+  await page.getByRole("link", { name: `${wafer}, 0°` }).click();
+  await expect(page.getByText("The fit was given every point").first()).toBeVisible();
+  await page.goto("/jobs");
+  const job = page.getByRole("listitem").filter({ hasText: `${wafer}_az000_post.csv` });
+  await expect(job).toContainText("One scan made.");
 });
 
 test.describe("a pair beyond a megabyte, without scripts", () => {

@@ -1,6 +1,7 @@
 import { beforeAll, describe, expect, test } from "vitest";
 import { MONITOR_PARAMETERS } from "#app/db/seeders/demo-monitor.ts";
-import { scanOf } from "#app/lib/job-files.ts";
+import { keptOf, pageOf } from "#app/lib/job-files.ts";
+import type { ProfileFileValues } from "#app/schemas/scan-import.ts";
 import type { ScanValues } from "#app/schemas/scan.ts";
 import type { ActorScope } from "#app/server/scope.server.ts";
 import { leave, scopeOfPerson } from "#tests/db/people.ts";
@@ -12,13 +13,14 @@ const pairs = () => import("#app/services/scan-pair-job.server.ts");
 const imports = () => import("#app/services/scan-readings/import-files.server.ts");
 const jobs = () => import("#app/services/jobs/jobs.server.ts");
 const running = () => import("#app/services/jobs/run-job.server.ts");
+const placing = () => import("#app/services/wafers/import-file.server.ts");
 const scans = () => import("#app/services/scans.server.ts");
 
 let technician: ActorScope;
 let values: ScanValues;
 
 beforeAll(async () => {
-  await Promise.all([pairs(), imports(), jobs(), running(), scans()]);
+  await Promise.all([pairs(), imports(), jobs(), running(), scans(), placing()]);
   technician = await scopeOfPerson(database, "technician");
   const program = technician.actor.memberships.find(({ programSlug }) => programSlug === "tern")?.programId ?? "";
   values = { program, label: "M-0400", film: null, ...MONITOR_PARAMETERS };
@@ -60,7 +62,7 @@ describe("a pair that is too large for a request", () => {
     await run(id);
     const job = await seen(id);
     expect(job).toMatchObject({ state: "done", done: job.total, sentence: "The pair is in." });
-    const scan = await (await scans()).getScan(technician, scanOf(job.outcome) ?? "");
+    const scan = await (await scans()).getScan(technician, pageOf(job.outcome)?.replace("/scans/", "") ?? "");
     expect(scan).toMatchObject({ label: "M-0400", files: { before: { name: "before.csv" } } });
     expect(scan.result.curvatureChange).toBeCloseTo(0.009, 7);
     // 3 mm to 5 mm of the rim are left out at either end.
@@ -101,6 +103,82 @@ describe("a pair that is too large for a request", () => {
     await leave(database, "shift-lead", "tern");
     await run(uploaded.id);
     expect(await seen(uploaded.id)).toMatchObject({ state: "failed" });
+  });
+});
+
+describe("files of an import that are too large for a request", () => {
+  const lines = [{ profile: 0, azimuth: 0 }];
+  const profile: ProfileFileValues["profile"] = {};
+  async function imported(
+    side: "before" | "after",
+    wafer: string,
+    file: ReturnType<typeof largeScan>,
+    changes: Partial<ProfileFileValues> = {},
+  ) {
+    const { decimalMark: _d, positionUnit: _p, heightUnit: _h, ...parameters } = MONITOR_PARAMETERS;
+    const place = { program: values.program, film: null, instrument: null, lot: "", slot: null, wafer, side };
+    return (await placing()).importFile(technician, { ...parameters, ...place, profile, lines, ...changes }, file);
+  }
+  async function jobOf(...given: Parameters<typeof imported>) {
+    const answer = await imported(...given);
+    if (answer.outcome !== "job") throw new Error(JSON.stringify(answer));
+    await run(answer.job);
+    return seen(answer.job);
+  }
+
+  test("are read and placed by jobs, and the scan is made of every point", async () => {
+    const first = await jobOf("before", "W-80", largeScan("w80 before.csv", 0.002));
+    expect(first).toMatchObject({ state: "done", sentence: "One waits for its partner." });
+    expect(pageOf(first.outcome)).toMatch(/^\/scans\/waiting\//);
+    const second = await jobOf("after", "W-80", largeScan("w80 after.csv", 0.011));
+    expect(second).toMatchObject({ state: "done", sentence: "One scan made." });
+    const { result } = await (await scans()).getScan(technician, pageOf(second.outcome)?.replace("/scans/", "") ?? "");
+    expect(result.curvatureChange).toBeCloseTo(0.009, 7);
+    expect(result.used).toBeGreaterThan(0.9 * ROWS);
+    expect(result.before.averagedTo).toBeUndefined();
+  });
+
+  test("are found where they lie when they come again, and when their worker died", async () => {
+    const first = await jobOf("before", "W-81", largeScan("w81 before.csv", 0.002));
+    const rows = await stored();
+    await asOwner(database, "update job set state = 'running', outcome = null where id = ?", [first.id]);
+    await run(first.id);
+    const again = await seen(first.id);
+    expect(keptOf(again.outcome)).toMatchObject({ placed: [{ outcome: "already", scan: null }] });
+    expect(again.sentence).toBe("One had been imported before.");
+    expect(await stored()).toEqual(rows);
+  });
+
+  test("of which a thickness is missing fail with what to type, and wait for nobody", async () => {
+    const unknown = { filmThickness: null };
+    await jobOf("before", "W-82", largeScan("w82 before.csv", 0.002), unknown);
+    const job = await jobOf("after", "W-82", largeScan("w82 after.csv", 0.011), unknown);
+    expect(job).toMatchObject({
+      state: "failed",
+      sentence: "Type the film thickness: W-82, 0° has both of its scans now.",
+    });
+  });
+
+  test("that cannot be read are refused at their beginning, and nothing is stored", async () => {
+    const rows = await stored();
+    const words = { name: "words.csv", bytes: utf8("one,two\n".repeat(200_000)) };
+    expect(await imported("before", "W-83", words)).toMatchObject({ outcome: "refused" });
+    expect(await stored()).toEqual(rows);
+  });
+
+  test("below a megabyte too are fitted at every point", async () => {
+    const some = (name: string, curvature: number) => {
+      const { bytes } = largeScan(name, curvature);
+      const text = new TextDecoder().decode(bytes).split("\n");
+      return { name, bytes: utf8(text.filter((_, n) => n === 0 || n % 3 === 1).join("\n")) };
+    };
+    expect(await imported("before", "W-84", some("w84 before.csv", 0.002))).toMatchObject({ outcome: "placed" });
+    const made = await imported("after", "W-84", some("w84 after.csv", 0.011));
+    const [placed] = made.outcome === "placed" ? made.placed : [];
+    if (placed?.outcome !== "scan") throw new Error(JSON.stringify(made));
+    const { result } = await (await scans()).getScan(technician, placed.scan);
+    expect(result.before.averagedTo).toBeUndefined();
+    expect(result.used).toBeGreaterThan(0.9 * (ROWS / 3));
   });
 });
 

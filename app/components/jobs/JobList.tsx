@@ -1,6 +1,6 @@
 import { Form, Link } from "react-router";
 import { fileSize } from "#app/lib/file-size.ts";
-import { filesOf, scanOf } from "#app/lib/job-files.ts";
+import { filesOf, pageOf } from "#app/lib/job-files.ts";
 import type { JobRow } from "#app/schemas/job.ts";
 import { JOB_WORDS } from "./job-words.ts";
 
@@ -27,7 +27,7 @@ export function JobList({ jobs }: { jobs: JobRow[] }) {
 
 function JobState({ job }: { job: JobRow }) {
   const { state, sentence, done, total, title, stopAsked } = job;
-  const scan = scanOf(job.outcome);
+  const page = pageOf(job.outcome);
   if (state === "running")
     return (
       <div className="mt-1 flex flex-wrap items-center gap-2">
@@ -42,11 +42,11 @@ function JobState({ job }: { job: JobRow }) {
     <p className={`mt-1 break-words ${state === "failed" ? "text-stop" : ""}`}>
       {JOB_WORDS[state]}
       {sentence && `. ${sentence}`}
-      {scan !== null && (
+      {page !== null && (
         <>
           {" "}
-          <Link to={`/scans/${scan}`} className="link">
-            Open the scan<span className="sr-only"> of {title}</span>
+          <Link to={page} className="link">
+            Open it<span className="sr-only">: {title}</span>
           </Link>
         </>
       )}

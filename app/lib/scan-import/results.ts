@@ -1,5 +1,5 @@
 import { count } from "#app/lib/count-words.ts";
-import type { BroughtInBefore, FileAnswer, PlacedProfile } from "#app/schemas/scan-import.ts";
+import type { BroughtInBefore, KeptFile, PlacedProfile } from "#app/schemas/scan-import.ts";
 
 /** What came of a file, or of one profile of it, as a line of the list. */
 export interface ImportResult {
@@ -15,13 +15,11 @@ export interface ImportResult {
   undo: { what: "scan" | "waiting" | "table"; id: string } | null;
 }
 
-type Kept = Exclude<FileAnswer, { outcome: "refused" | "fields" }>;
-
 /** The list with what came of one more file. A file that has waited is named with the scan that it has become part of. */
 export function addedResults(
   known: readonly ImportResult[],
   { file, key }: { file: string; key: string },
-  answer: Kept,
+  answer: KeptFile,
 ): ImportResult[] {
   if (answer.outcome !== "placed") return [...known, tableResult(file, key, answer)];
   let results = [...known];
@@ -56,7 +54,7 @@ function waitingOrKnown(
   return { outcome: "already", path, words: importedBefore(placed.before), undo: null };
 }
 
-function tableResult(file: string, key: string, answer: Exclude<Kept, { outcome: "placed" }>): ImportResult {
+function tableResult(file: string, key: string, answer: Exclude<KeptFile, { outcome: "placed" }>): ImportResult {
   const line = { key, label: file, files: [] };
   if (answer.outcome === "known table")
     return { ...line, outcome: "already", path: null, words: importedBefore(answer.before), undo: null };

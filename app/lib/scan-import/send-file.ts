@@ -1,14 +1,23 @@
 import type { FileAnswer } from "#app/schemas/scan-import.ts";
 import type { BatchFile } from "./batch.ts";
 import { kindOf, takenLines } from "./place-words.ts";
+import { waitForJob } from "./wait-for-job.ts";
 
-const refused = (reason: string): FileAnswer => ({ outcome: "refused", reason });
+/** What the screen learns of a file in the end. */
+export type Answered = Exclude<FileAnswer, { outcome: "job" }>;
+
+const refused = (reason: string): Answered => ({ outcome: "refused", reason });
 
 /**
  * Sends a file with the profile that it was read by and what it is of. A server that does not answer is told like a refusal.
  * @param shared what all files of the batch have in common, by field
+ * @param tell is told how far the reading of a large one is, bytes
  */
-export async function sendFile(file: BatchFile, shared: FormData): Promise<FileAnswer> {
+export async function sendFile(
+  file: BatchFile,
+  shared: FormData,
+  tell: (done: number, of: number) => void,
+): Promise<Answered> {
   const body = new FormData();
   for (const [field, value] of shared) body.append(field, value);
   body.set("profile", JSON.stringify(file.profile));
@@ -31,7 +40,8 @@ export async function sendFile(file: BatchFile, shared: FormData): Promise<FileA
   if (response.redirected) return refused("Your session has ended. Sign in again in another tab, then import again.");
   if (!response.ok || !response.headers.get("Content-Type")?.includes("json"))
     return refused(await sentenceOf(response));
-  return (await response.json()) as FileAnswer;
+  const answer = (await response.json()) as FileAnswer;
+  return answer.outcome === "job" ? waitForJob(answer.job, tell) : answer;
 }
 
 /** The sentence of a refusal by the server, where it gives one. */

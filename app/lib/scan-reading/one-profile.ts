@@ -61,11 +61,23 @@ export function onlyProfile(read: ScanRead, fileName: string): ReadProfile {
     throw new ScanFileError(
       `${name} holds ${read.content.profiles.length} profiles: ${read.content.profiles.map((each) => `“${excerpt(each.name, 30)}”`).join(", ")}. Export the one that is meant to a file of its own.`,
     );
-  return {
-    points: { x: only.x, z: only.z },
-    reading: fileReading(read.reading, read.content, about(only, only.x.length)),
-  };
+  return wholeProfile(read.reading, read.content, only);
 }
+
+/**
+ * One of the profiles of a file that was read, with all its points.
+ * @returns null when the file has no such profile
+ */
+export function readProfile(read: ScanRead, which: number): ReadProfile | null {
+  if (read.outcome === "question" || read.content.kind !== "profiles") return null;
+  const profile = read.content.profiles[which];
+  return profile ? wholeProfile(read.reading, read.content, profile) : null;
+}
+
+const wholeProfile = (reading: Reading, content: ProfileFile, profile: FileProfile): ReadProfile => ({
+  points: { x: profile.x, z: profile.z },
+  reading: fileReading(reading, content, about(profile, profile.x.length)),
+});
 
 /**
  * One of the profiles that a stored reading holds, as the file was read then. Where points were averaged, the ends are those of the

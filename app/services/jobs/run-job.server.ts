@@ -8,6 +8,7 @@ import { inScope, type ActorScope, type Scope } from "#app/server/scope.server.t
 import { actorById } from "../actor.server.ts";
 import { readStoredPair } from "../scan-pair-job.server.ts";
 import { readStoredFiles } from "../scan-readings/read-stored-files.server.ts";
+import { importStoredFile } from "../wafers/import-by-job.server.ts";
 import { JobInterrupted, JobRefused, JobStopped, progressOf, type Tell } from "./progress.server.ts";
 
 const payloadSchema = z.object({ id: z.uuid() });
@@ -28,6 +29,7 @@ type Work<Kind extends JobKind> = (
 const WORK: { [Kind in JobKind]: Work<Kind> } = {
   "scan files": readStoredFiles,
   "scan pair": readStoredPair,
+  "file import": importStoredFile,
 };
 
 /** The input of a job is that of its kind: both were put into the queue together. */

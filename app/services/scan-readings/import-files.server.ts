@@ -3,9 +3,6 @@ import { ScanFile } from "#app/db/entities/scan-file.ts";
 import { excerpt } from "#app/lib/excerpt.ts";
 import { LARGEST_ON_REQUEST } from "#app/lib/scan-file.ts";
 import { readingFigures } from "#app/lib/reading-figures.ts";
-import type { Fault } from "#app/lib/scan-reading/reading.ts";
-import { questionAtBeginning } from "#app/lib/scan-reading/beginning.ts";
-import { ScanFileError } from "#app/lib/scan-reading/refusal.ts";
 import { readScanFile } from "#app/lib/scan-reading/scan-reader.ts";
 import type { StoredFile } from "#app/schemas/job.ts";
 import type { ReadingSettings, ScanReadingResult } from "#app/schemas/scan-reading.ts";
@@ -15,12 +12,12 @@ import { enqueueOnce } from "../jobs/enqueue.server.ts";
 import { requireInProgram } from "../permission.server.ts";
 import { fileHash, keepScanFile, keepScanFileAlone } from "../scan-files.server.ts";
 import { keepReading, knownReading } from "./keep-reading.server.ts";
-import { fileRefusal } from "./refusal-sentence.ts";
+import { refusedAtBeginning, refusedFile, type RefusedFile } from "./refused-at-beginning.ts";
 
 export type Imported =
   | { outcome: "read" | "already read"; reading: string }
   | { outcome: "job"; job: string }
-  | { outcome: "refused"; reason: string; faults: Fault[] };
+  | ({ outcome: "refused" } & RefusedFile);
 
 interface Import {
   program: string;
@@ -40,7 +37,7 @@ export async function importScanFiles(scope: ActorScope, { program, files, setti
   if (others.length > 0) return importInJob(scope, { program, files, settings });
   const isLarge = only.bytes.length > LARGEST_ON_REQUEST;
   const refused = isLarge ? refusedAtBeginning(only, settings) : null;
-  if (refused) return refused;
+  if (refused) return { outcome: "refused", ...refused };
   const known = await inScope(scope, (em) => readingOfBytes(em, program, only, settings));
   if (known !== null) return { outcome: "already read", reading: known };
   return isLarge ? importInJob(scope, { program, files, settings }) : importNow(scope, program, only, settings);
@@ -56,26 +53,6 @@ async function readingOfBytes(
   return file && knownReading(em, file.id, settings);
 }
 
-function refusedAtBeginning(
-  { bytes, name }: UploadedFile,
-  { profile, edgeExclusion }: ReadingSettings,
-): Imported | null {
-  try {
-    const question = questionAtBeginning(bytes, name, profile);
-    if (question) readingFigures(excerpt(name, 80), question, edgeExclusion);
-    return null;
-  } catch (error) {
-    return refusedBy(error);
-  }
-}
-
-/** @throws what is no fault of the file */
-function refusedBy(error: unknown): Imported {
-  const reason = fileRefusal(error);
-  if (reason === null) throw error;
-  return { outcome: "refused", reason, faults: error instanceof ScanFileError ? error.faults : [] };
-}
-
 async function importNow(
   scope: ActorScope,
   program: string,
@@ -87,7 +64,7 @@ async function importNow(
     const name = excerpt(file.name, 80);
     result = readingFigures(name, readScanFile(file.bytes, file.name, settings.profile), settings.edgeExclusion);
   } catch (error) {
-    return refusedBy(error);
+    return { outcome: "refused", ...refusedFile(error) };
   }
   try {
     const reading = await inScope(scope, async (em) => {

@@ -9,6 +9,7 @@ import { inScope, type ActorScope } from "#app/server/scope.server.ts";
 import { JobRefused, type Tell } from "../jobs/progress.server.ts";
 import type { Worked } from "../jobs/run-job.server.ts";
 import { requireInProgram } from "../permission.server.ts";
+import { piecesOf } from "../scan-files.server.ts";
 import { keepReading, knownReading } from "./keep-reading.server.ts";
 import { readInPieces } from "./read-in-pieces.server.ts";
 import { fileRefusal } from "./refusal-sentence.ts";
@@ -65,7 +66,7 @@ async function readStored(
   if (known !== null) return { outcome: "already read", reading: known };
   let result: ScanReadingResult;
   try {
-    const read = await readInPieces(scope, { id, ...stored }, settings.profile, tell);
+    const read = await readInPieces(piecesOf(scope, id), stored, settings.profile, tell);
     result = readingFigures(stored.name, read, settings.edgeExclusion);
   } catch (error) {
     const reason = fileRefusal(error);

@@ -4,7 +4,7 @@ import type { ScanReading } from "#app/db/entities/scan-reading.ts";
 import type { Wafer } from "#app/db/entities/wafer.ts";
 import { WaferMeasurement } from "#app/db/entities/wafer-measurement.ts";
 import { contentByWafer, type NamedContent } from "#app/lib/table-by-wafer.ts";
-import type { FileAnswer, TableFileValues } from "#app/schemas/scan-import.ts";
+import type { KeptFile, TableFileValues } from "#app/schemas/scan-import.ts";
 import type { ScanReadingResult } from "#app/schemas/scan-reading.ts";
 import type { ActorScope } from "#app/server/scope.server.ts";
 import { findOrMakeWafer } from "./find-wafer.server.ts";
@@ -22,7 +22,7 @@ export async function keepTable(
   values: TableFileValues,
   reading: ScanReading,
   result: ScanReadingResult,
-): Promise<FileAnswer> {
+): Promise<KeptFile> {
   const [known] = await em.find(
     WaferMeasurement,
     { reading: { file: reading.file.id } },

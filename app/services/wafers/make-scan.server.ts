@@ -2,18 +2,21 @@ import { randomUUID } from "node:crypto";
 import type { EntityManager } from "@mikro-orm/postgresql";
 import { Film } from "#app/db/entities/film.ts";
 import { Scan } from "#app/db/entities/scan.ts";
+import type { ScanFile } from "#app/db/entities/scan-file.ts";
 import { ScanReading } from "#app/db/entities/scan-reading.ts";
 import { Wafer } from "#app/db/entities/wafer.ts";
 import type { WaferScan } from "#app/db/entities/wafer-scan.ts";
 import { ENGINE_VERSION } from "#app/engine/version.ts";
 import { excerpt } from "#app/lib/excerpt.ts";
 import { checkOnWafer } from "#app/lib/profile-on-wafer.ts";
-import { storedProfile } from "#app/lib/scan-reading/one-profile.ts";
+import { readProfile, storedProfile, type ReadProfile } from "#app/lib/scan-reading/one-profile.ts";
 import { ScanFileError } from "#app/lib/scan-reading/refusal.ts";
 import { lineLabel } from "#app/lib/wafer-label.ts";
 import type { WaferScanSubject } from "#app/schemas/wafer.ts";
 import type { ActorScope } from "#app/server/scope.server.ts";
+import { piecesWithin } from "../scan-files.server.ts";
 import { formatOf, pairResult, type PairedProfile } from "../scan-pair.ts";
+import { readInPieces } from "../scan-readings/read-in-pieces.server.ts";
 import { ImportRefused } from "./import-refused.ts";
 import { labelled } from "./wafer-of.ts";
 
@@ -75,17 +78,24 @@ export async function makeScan(
 }
 
 async function profileOf(em: EntityManager, placed: WaferScan, subject: Complete) {
-  const { file, result } = await em.findOneOrFail(
-    ScanReading,
-    { id: placed.reading.id },
-    { populate: ["file", "result"] },
-  );
-  const profile = storedProfile(result.get(), placed.profile);
+  const reading = await em.findOneOrFail(ScanReading, { id: placed.reading.id }, { populate: ["file", "result"] });
+  const { file } = reading;
+  const kept = storedProfile(reading.result.get(), placed.profile);
+  // What is kept of a long profile are means; the scan is made of all its points.
+  const profile = kept?.reading.averagedTo === undefined ? kept : await profileFromFile(em, reading, placed.profile);
   if (!profile) throw new Error("a placed scan has a profile");
   const name = excerpt(file.name, 80);
   checkOnWafer(profile, name, subject);
   const paired: PairedProfile = { name, hash: file.hash, profile };
   return { file, paired };
+}
+
+async function profileFromFile(
+  em: EntityManager,
+  { file, settings }: Pick<ScanReading, "settings"> & { file: Pick<ScanFile, "id" | "name" | "size"> },
+  which: number,
+): Promise<ReadProfile | null> {
+  return readProfile(await readInPieces(piecesWithin(em, file.id), file, settings.profile), which);
 }
 
 /** What was said of two scans, taken together. */

@@ -2,9 +2,10 @@ import type { SubmissionResult } from "@conform-to/react";
 import { useCallback, useMemo, useState } from "react";
 import { Link } from "react-router";
 import type { Choice } from "#app/components/forms/ChoiceField.tsx";
-import { UnsavedGuard } from "#app/components/forms/UnsavedGuard.tsx";
+import { LEAVE, UnsavedGuard } from "#app/components/forms/UnsavedGuard.tsx";
 import { RunProgress } from "#app/components/ui/RunProgress.tsx";
 import { useInBrowser } from "#app/components/ui/use-in-browser.ts";
+import { fileSize } from "#app/lib/file-size.ts";
 import { MOST_FILES, type BatchFile } from "#app/lib/scan-import/batch.ts";
 import { batchPlan } from "#app/lib/scan-import/plan.ts";
 import { BatchForm } from "./BatchForm.tsx";
@@ -85,6 +86,15 @@ export function ImportScreen({ programs, films, profiles }: Props) {
                 {sending !== null ? "Importing" : ready === 0 ? "Import" : `Import ${counted}`}
               </button>
               {sending !== null && <RunProgress done={sending.done} of={sending.of} label="Files imported" />}
+              {sending?.reading && (
+                <p className="text-quiet wrap-anywhere">
+                  {`${sending.reading.name} is large: ${fileSize(sending.reading.read)} of ${fileSize(sending.reading.bytes)} read. It goes on when you leave, in the `}
+                  <Link to="/jobs" state={LEAVE} className="link">
+                    work under way
+                  </Link>
+                  .
+                </p>
+              )}
               <p role="status" className="text-quiet">
                 {finished && outcomeWords(finished)}
               </p>

@@ -11,9 +11,16 @@ type FieldErrors = Extract<FileAnswer, { outcome: "fields" }>["errors"];
 export const refusalKey = ({ key, revision, of, azimuths }: BatchFile) =>
   `${key} ${revision} ${JSON.stringify([of, azimuths])}`;
 
+interface Sending {
+  done: number;
+  of: number;
+  /** a large file that the server is reading, bytes */
+  reading?: { name: string; read: number; bytes: number };
+}
+
 /** Sends the files of a batch one after the other and keeps what came of each. */
 export function useImport(leave: (keys: string[]) => void) {
-  const [sending, setSending] = useState<{ done: number; of: number } | null>(null);
+  const [sending, setSending] = useState<Sending | null>(null);
   const [results, setResults] = useState<readonly ImportResult[]>([]);
   const [refused, setRefused] = useState<ReadonlyMap<string, string>>(new Map());
   const [errors, setErrors] = useState<FieldErrors | null>(null);
@@ -29,7 +36,9 @@ export function useImport(leave: (keys: string[]) => void) {
     const outcome = { kept: 0, refused: 0 };
     for (const [n, file] of files.entries()) {
       setSending({ done: n, of: files.length });
-      const answer = await sendFile(file, shared);
+      const answer = await sendFile(file, shared, (read, bytes) =>
+        setSending({ done: n, of: files.length, reading: { name: file.file.name, read, bytes } }),
+      );
       if (answer.outcome === "fields") {
         setErrors(answer.errors);
         break;
