@@ -20,6 +20,9 @@ export default [
     ...prefix("films", [
       index("routes/_app/films/list.tsx"),
       route("new", "routes/_app/films/new.tsx"),
+      route("films.csv", "routes/_app/films/csv.ts"),
+      route("import", "routes/_app/films/import.tsx"),
+      route("compare", "routes/_app/films/compare.tsx"),
       route(":filmId", "routes/_app/films/detail.tsx"),
       route(":filmId/edit", "routes/_app/films/edit.tsx"),
       route(":filmId/stress.csv", "routes/_app/films/stress-csv.ts"),

@@ -18,7 +18,7 @@ export function keepUnchanged(record: object, values: Record<string, unknown>): 
   );
 }
 
-const saysTheSame = (a: Measured, b: Measured) =>
+export const saysTheSame = (a: Measured, b: Measured) =>
   sameNumber(a.value, b.value) &&
   sameNumber(a.tolerance, b.tolerance) &&
   a.source === b.source &&

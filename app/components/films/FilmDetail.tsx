@@ -38,17 +38,23 @@ export function FilmDetail(props: Props) {
         ],
       }}
     >
-      {mayAsk && (
-        <p className="px-4 pb-4 tablet:px-6">
-          <Link to={`/assessments/change-request?of=film:${record.id}`} className="link">
-            What would change?
-          </Link>
-          {" · "}
-          <Link to={`/predictions?of=stress&film=${record.id}`} className="link">
-            Predicted against measured
-          </Link>
-        </p>
-      )}
+      <p className="px-4 pb-4 tablet:px-6">
+        <Link to={`/films/compare?of=${record.id}`} className="link">
+          Compare with another film
+        </Link>
+        {mayAsk && (
+          <>
+            {" · "}
+            <Link to={`/assessments/change-request?of=film:${record.id}`} className="link">
+              What would change?
+            </Link>
+            {" · "}
+            <Link to={`/predictions?of=stress&film=${record.id}`} className="link">
+              Predicted against measured
+            </Link>
+          </>
+        )}
+      </p>
     </LibraryDetail>
   );
 }

@@ -1,3 +1,4 @@
+import type { ReactNode } from "react";
 import { Link } from "react-router";
 import { PageHead } from "#app/components/layout/PageHead.tsx";
 import { DataTable, type Column } from "#app/components/ui/DataTable.tsx";
@@ -23,10 +24,12 @@ interface Props<Row> {
   view: ListView<Row>;
   page: ListPage<Row>;
   mayEdit: boolean;
+  /** what else can be done with the list */
+  more?: ReactNode;
 }
 
 /** A list of the library: search, filters, sorted and paged table, or what belongs here when it is empty. */
-export function LibraryList<Row extends { id: string; name: string }>({ view, page, mayEdit }: Props<Row>) {
+export function LibraryList<Row extends { id: string; name: string }>({ view, page, mayEdit, more }: Props<Row>) {
   const { title, one, many, path, filters, columns, belongs } = view;
   const { total, rows, params } = page;
   const searched = params.query !== "" || Object.values(params.filters).some(Boolean);
@@ -50,7 +53,12 @@ export function LibraryList<Row extends { id: string; name: string }>({ view, pa
       <PageHead
         title={title}
         remark={searched ? `${total} found` : `${total} ${total === 1 ? one : many}`}
-        actions={add}
+        actions={
+          <>
+            {more}
+            {add}
+          </>
+        }
       />
       <ListHead what={many} filters={filters} />
       {rows.length > 0 ? (
