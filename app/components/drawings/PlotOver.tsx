@@ -5,6 +5,7 @@ import { coordinate } from "./coordinate.ts";
 import { limitLabels } from "./limit-labels.ts";
 import type { Plot, PlotFrame, PlotScales } from "./plot.ts";
 import { PlotMarker } from "./PlotMarker.tsx";
+import { PlotMarks } from "./PlotMarks.tsx";
 import { seriesValue } from "./series-value.ts";
 import { spreadLabels } from "./spread-labels.ts";
 import { textWidth } from "./text-width.ts";
@@ -54,6 +55,7 @@ export function PlotOver(props: PlotOverProps) {
       <YLimits {...props} />
       <Regime {...props} />
       {withoutEndLabels ? null : <Along {...props} />}
+      <PlotMarks plot={plot} frame={frame} scales={scales} textSize={textSize} />
       <Chosen {...props} />
       {withoutEndLabels ? null : <EndLabels plot={plot} frame={frame} scales={scales} textSize={textSize} />}
     </>
