@@ -1,6 +1,6 @@
 import type { CrossingWords } from "#app/schemas/stack-comparison.ts";
 import { count } from "../count-words.ts";
-import { lengthWords, thicknessWords } from "../stack-words.ts";
+import { lengthWords, limitWords, thicknessWords } from "../stack-words.ts";
 import { warpCrossings, warpCurve, type Crossing, type PairOfWarps } from "./crossings.ts";
 import type { ComparedStack } from "./figures.ts";
 
@@ -40,14 +40,18 @@ const crossedAt = ({ thickness, warp }: Crossing) => `${lengthWords(thickness)} 
 /** One pair in words: where their warps are equal, and which warps more where it is thin. */
 export function pairSentence(first: string, second: string, pair: PairOfWarps, { from, to }: Range): string {
   const both = `${first} and ${second}`;
-  const range = `from ${thicknessWords(from)} to ${thicknessWords(to)}`;
-  if (pair.kind === "the same") return `${both} warp the same ${range}.`;
+  if (pair.kind === "rolled up")
+    return `${both} cannot be told apart up to ${thicknessWords(to)}: one of them is rolled past half a turn.`;
+  const rolled = pair.from > from ? ` Below ${limitWords(pair.from)} one of them is rolled past half a turn.` : "";
+  const end = limitWords(pair.from);
+  const range = `from ${end} to ${thicknessWords(to)}`;
+  if (pair.kind === "the same") return `${both} warp the same ${range}.${rolled}`;
   const more = pair.thinner === "first" ? first : second;
-  if (pair.kind === "apart")
-    return `${both} are nowhere equal ${range}: ${more} warps more at ${thicknessWords(from)}.`;
+  if (pair.kind === "apart") return `${both} are nowhere equal ${range}: ${more} warps more at ${end}.${rolled}`;
   const places = pair.at.map(crossedAt);
   const last = places.pop() ?? "";
   const where = places.length === 0 ? last : `${places.join(", ")} and ${last}`;
   const times = pair.at.length === 1 ? "" : ` ${count(pair.at.length)} times,`;
-  return `${both} warp alike${times} at ${where}. Thinner than ${pair.at.length === 1 ? "that" : "the first of these"}, ${more} warps more.`;
+  const than = pair.at.length === 1 ? "that" : "the first of these";
+  return `${both} warp alike${times} at ${where}. Thinner than ${than}, ${more} warps more.${rolled}`;
 }

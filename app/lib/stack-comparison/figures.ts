@@ -54,8 +54,13 @@ export function stackFigures(estimated: Estimated): StackFigures {
   };
 }
 
+/** A roll that has closed is lower than one of half a turn: from this share of that one's radius on it tells by its radius. */
+const CLOSING = 0.75;
+
 /** Warp of the free wafer at another thickness of its silicon (m), by the full model. */
 export function warpAt(stack: StackInput, thickness: number): WarpAt {
-  const { warp, regime } = reachedWaferShape(freeDisc(withThickness(stack, thickness)).disc);
-  return { thickness, warp, regime, rolledUp: warp >= (HALF_TURN * stack.wafer.diameter) / 2 };
+  const { warp, regime, rollRadius } = reachedWaferShape(freeDisc(withThickness(stack, thickness)).disc);
+  const halfTurn = (HALF_TURN * stack.wafer.diameter) / 2;
+  const rolledUp = warp >= halfTurn || (rollRadius !== null && rollRadius < CLOSING * halfTurn);
+  return { thickness, warp, regime, rolledUp };
 }

@@ -31,7 +31,7 @@ export function filmSlots(stacks: readonly Pick<ComparedInputs, "layers">[]): Fi
       }
       const slot = slots[at];
       if (slot) slot.places[column] = place;
-      after = at;
+      after = Math.max(after, at);
     });
   });
   return turnFront(slots);
