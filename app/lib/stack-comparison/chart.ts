@@ -89,7 +89,7 @@ export function warpLines(
   const lenient = rest.reduce((high, next) => (next.least > high.least ? next : high), first);
   const line = ({ name, least }: typeof first, word: string) => ({
     value: least,
-    lines: [`${word} tool, ${micrometres(least)}: ${shortName(name)}`],
+    lines: [`${micrometres(least)}, ${word}: ${shortName(name)}`],
   });
   return strictest.least === lenient.least
     ? [line(strictest, "strictest")]
@@ -99,7 +99,7 @@ export function warpLines(
 function linesOf({ name, edgesUp, edgesDown }: ComparedTool): ComparisonChart["warpLimits"] {
   const line = (value: number, which: string) => ({
     value,
-    lines: [`${shortName(name)}, ${which}${micrometres(value)}`],
+    lines: [`${which}${micrometres(value)}: ${shortName(name)}`],
   });
   if (edgesUp !== null && edgesUp === edgesDown) return [line(edgesUp, "")];
   return [
@@ -109,7 +109,8 @@ function linesOf({ name, edgesUp, edgesDown }: ComparedTool): ComparisonChart["w
 }
 
 const micrometres = (metres: number) => formatQuantity(metres, "length", { unit: "µm" });
-const shortName = (name: string) => shortened(name);
+/** The name of a tool stands inside the plot, where a phone has room for this many letters. */
+const shortName = (name: string) => (name.length <= 30 ? name : `${name.slice(0, 29).trimEnd()}…`);
 
 /** All of the chart in one place. */
 export function comparisonChart(

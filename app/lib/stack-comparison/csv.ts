@@ -71,7 +71,7 @@ function figureRows(stack: ComparedStack): Row[] {
   const { request, answer } = figures.estimated;
   const own = micro(request.wafer.thickness_m);
   const { shape, support, curls_below_m } = answer;
-  const uncertainty = shape.warp_linear ? shape.warp_standard_uncertainty_m : null;
+  const uncertainty = shape.warp_linear && !figures.own.rolledUp ? shape.warp_standard_uncertainty_m : null;
   return [
     row("", "engine version", "", answer.engine_version, ""),
     row("", "temperature", "", request.temperature_K ?? ROOM_TEMPERATURE, "K"),
@@ -79,7 +79,9 @@ function figureRows(stack: ComparedStack): Row[] {
     ...(figures.bowUncertainty === null || shape.regime === "curled"
       ? []
       : [row("", "bow standard uncertainty", own, micro(figures.bowUncertainty), "um")]),
-    row("", "warp", own, micro(shape.warp_m), "um"),
+    figures.own.rolledUp
+      ? row("", "warp", own, "rolled past half a turn", "")
+      : row("", "warp", own, micro(shape.warp_m), "um"),
     ...(uncertainty === null ? [] : [row("", "warp standard uncertainty", own, micro(uncertainty), "um")]),
     row("", "regime", own, shape.regime, ""),
     ...(curls_below_m === null ? [] : [row("", "curls below", "", micro(curls_below_m), "um")]),

@@ -21,6 +21,9 @@ const REGIMES: Record<ShapeRegime, string> = {
   curled: "curled about one axis",
 };
 
+/** Said in the place of a warp that means nothing any more. */
+const ROLLED_UP = "rolled past half a turn";
+
 type Cell = ReturnType<Parameters<typeof comparedRow>[3]>;
 
 /** What the free wafers do, as rows: shape at the temperature (in words), warp over thickness, and what it takes to lift them. */
@@ -40,8 +43,8 @@ export function figureGroups(
         row("bow", "Bow, device side up", bowCell),
         row("lies", "Lies", ({ estimated }) => ({ text: shapeWords(estimated.answer.shape, limits.flatWithin.value) })),
         row("warp", "Warp", (figures) => ({
-          text: warpWords(figures.estimated.answer.shape),
-          note: away(figures.estimated.answer.shape.warp_m, first?.estimated.answer.shape.warp_m, figures === first),
+          ...warpCell(figures.own, figures === first ? undefined : first?.own),
+          ...(!figures.own.rolledUp && { text: warpWords(figures.estimated.answer.shape) }),
         })),
         row("regime", "Regime", ({ estimated: { answer } }) => ({
           text: REGIMES[answer.shape.regime],
@@ -96,14 +99,14 @@ function bowCell({ estimated, bowUncertainty }: StackFigures): Cell {
 
 function warpCell(here: WarpAt | undefined, first: WarpAt | undefined): Cell {
   if (!here) return UNKNOWN;
-  if (here.rolledUp) return { text: "rolled past half a turn" };
-  const apart = first && !first.rolledUp ? away(here.warp, first.warp, false) : null;
+  if (here.rolledUp) return { text: ROLLED_UP };
+  const apart = first && !first.rolledUp ? away(here.warp, first.warp) : null;
   const notes = [...(here.regime === "curled" ? ["curled"] : []), ...(apart ? [apart] : [])];
   return { text: lengthWords(here.warp), note: notes.length > 0 ? notes.join(", ") : null };
 }
 
-/** How far a warp is from the first stack's: '57 µm more'; null for the first itself and where there is nothing between them. */
-function away(warp: number, first: number | undefined, isFirst: boolean): string | null {
-  if (isFirst || first === undefined || lengthWords(warp) === lengthWords(first)) return null;
+/** How far a warp is from the first stack's: '57 µm more'; null where there is nothing between them. */
+function away(warp: number, first: number): string | null {
+  if (lengthWords(warp) === lengthWords(first)) return null;
   return `${lengthWords(Math.abs(warp - first))} ${warp > first ? "more" : "less"}`;
 }

@@ -30,6 +30,8 @@ export interface StackFigures {
   stack: StackInput;
   /** of the bow, m; null without a tolerance, or where it is not close to linear over them */
   bowUncertainty: number | null;
+  /** at its own thickness */
+  own: WarpAt;
   warpAt: WarpAt[];
   /** force per width of each film, N/m, tension positive; of lines the mean of along and across */
   pulls: number[];
@@ -46,6 +48,7 @@ export function stackFigures(estimated: Estimated): StackFigures {
     estimated,
     stack,
     bowUncertainty: bow?.linear ? bow.standardUncertainty : null,
+    own: warpAt(stack, stack.wafer.thickness),
     warpAt: COMPARED_AT.map((thickness) => warpAt(stack, thickness)),
     pulls: atItsTemperature(stack).films.map((film) => {
       const { x, y } = pullOf(film);

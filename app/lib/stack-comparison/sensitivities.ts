@@ -38,7 +38,7 @@ const halfWidth = (input: UncertainQuantity) => (input.distribution === "rectang
 
 /** The largest movers of every stack in words, with bars on one scale for all. */
 export function sensitivityWords(stacks: readonly ComparedStack[]): StackSensitivity[] {
-  const found = stacks.map((stack) => ({ stack, answer: warpMovers(stack) }));
+  const found = stacks.map((stack) => ({ stack, answer: stack.figures?.own.rolledUp ? null : warpMovers(stack) }));
   const largest = Math.max(0, ...found.flatMap(({ answer }) => answer?.movers.map(({ moves }) => moves) ?? []));
   return found.map(({ stack, answer }) => ({
     letter: stack.letter,
@@ -54,6 +54,7 @@ export function sensitivityWords(stacks: readonly ComparedStack[]): StackSensiti
 
 function remarkOf({ figures }: ComparedStack, answer: ReturnType<typeof warpMovers>): string | null {
   if (!figures) return "It cannot be estimated.";
+  if (figures.own.rolledUp) return "It is rolled past half a turn, where a warp means nothing.";
   if (!answer) return "Nothing of it has a tolerance, so nothing is known to move it.";
   if (answer.movers.length === 0) return "No tolerance of it moves the warp.";
   if (!answer.linear) return "The warp bends over these tolerances: take the figures for the first order only.";

@@ -125,8 +125,8 @@ describe("the chart", () => {
     expect(warpLines(tools, "", [0.2, 0.3]).map(({ value }) => value)).toEqual([400e-6, 2e-3]);
     expect(warpLines(tools, "", [0.2]).map(({ value }) => value)).toEqual([100e-6, 2e-3]);
     expect(warpLines(tools, "1", [0.3]).map(({ lines }) => plain(lines[0] ?? ""))).toEqual([
-      "Tool 1, edges up 400 µm",
-      "Tool 1, edges down 500 µm",
+      "edges up 400 µm: Tool 1",
+      "edges down 500 µm: Tool 1",
     ]);
     expect(warpLines(tools, "4", [0.3])).toHaveLength(1);
     expect(warpLines(tools, "none", [0.3])).toEqual([]);

@@ -1,7 +1,6 @@
 import { Form } from "react-router";
-import { useInBrowser } from "#app/components/ui/use-in-browser.ts";
 import { count } from "#app/lib/count-words.ts";
-import { LEAST_STACKS, MOST_STACKS } from "#app/lib/stack-comparison/asked.ts";
+import { MOST_STACKS } from "#app/lib/stack-comparison/asked.ts";
 
 /** Id of the form that the boxes of the list belong to. */
 export const TICK_FORM = "compare-ticked";
@@ -10,13 +9,11 @@ interface Props {
   ticked: ReadonlySet<string>;
   /** ids whose boxes are on this page of the list */
   onPage: readonly string[];
-  onClear: () => void;
+  onClear: (form: HTMLFormElement | null) => void;
 }
 
 /** Compares the stacks that are ticked in the list, those on other pages of it as well. */
 export function CompareTicked({ ticked, onPage, onClear }: Props) {
-  const inBrowser = useInBrowser();
-  const enough = ticked.size >= LEAST_STACKS && ticked.size <= MOST_STACKS;
   return (
     <Form
       id={TICK_FORM}
@@ -30,16 +27,18 @@ export function CompareTicked({ ticked, onPage, onClear }: Props) {
         .map((id) => (
           <input key={id} type="hidden" name="of" value={id} />
         ))}
-      <button type="submit" className="btn" disabled={inBrowser && !enough} aria-describedby="compare-hint">
-        {inBrowser && ticked.size > 0
-          ? `Compare ${ticked.size} ${ticked.size === 1 ? "stack" : "stacks"}`
-          : "Compare the stacks ticked"}
+      <button type="submit" className="btn" aria-describedby="compare-hint">
+        {ticked.size > 0 ? `Compare ${ticked.size} ${ticked.size === 1 ? "stack" : "stacks"}` : "Compare stacks ticked"}
       </button>
       <span id="compare-hint" className="text-quiet" role="status">
         {hint(ticked.size)}
       </span>
       {ticked.size > 0 ? (
-        <button type="button" className="link min-h-8 cursor-pointer" onClick={onClear}>
+        <button
+          type="button"
+          className="link min-h-8 cursor-pointer"
+          onClick={(event) => onClear(event.currentTarget.form)}
+        >
           Untick all
         </button>
       ) : null}

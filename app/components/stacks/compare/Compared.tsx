@@ -3,6 +3,7 @@ import { ChartFigure } from "#app/components/charts/ChartFigure.tsx";
 import type { ComparedView, ComparisonView } from "#app/schemas/stack-comparison.ts";
 import { chartName } from "./chart-words.ts";
 import { comparisonPlot } from "./comparison-plot.ts";
+import { Crossings } from "./Crossings.tsx";
 import { DifferenceTable } from "./DifferenceTable.tsx";
 import { Sensitivities } from "./Sensitivities.tsx";
 
@@ -40,14 +41,7 @@ export function Compared({ view, compared }: { view: ComparisonView; compared: C
         <h2 id="crossings" className="font-semibold">
           Where they warp alike
         </h2>
-        <ul className="mt-1">
-          {crossings.map(({ key, numbers, sentence }) => (
-            <li key={key} className="py-0.5">
-              {numbers.length > 0 ? <b>{numbers.join(", ")}: </b> : null}
-              {noBreak(sentence)}
-            </li>
-          ))}
-        </ul>
+        <Crossings crossings={crossings} />
       </section>
       <section className={SECTION} aria-labelledby="differences">
         <DifferenceTable asked={view.asked} stacks={view.stacks} groups={groups} />

@@ -71,15 +71,16 @@ export function ComparisonPaper({ asked, stacks, compared, paper, preparedBy, pr
               />
             </div>
             <PaperTable stacks={stacks} groups={groups} />
-            {moreRows > 0 ? <p className={CELL}>Further inputs differ, {moreRows} rows: see the screen.</p> : null}
-            <ul className={CELL}>
+            {moreRows > 0 ? <p className={CELL}>{moreRows} more rows on the screen.</p> : null}
+            <ul className={CELL} aria-label="Where they warp alike">
               {crossings.map(({ key, numbers, sentence }) => (
                 <li key={key}>
                   {numbers.length > 0 ? <strong>{numbers.join(", ")}: </strong> : null}
                   {noBreak(sentence)}
                 </li>
               ))}
-              {moreCrossings > 0 ? <li>And {count(moreCrossings)} more pairs: see the screen.</li> : null}
+              {crossings.length === 0 ? <li>No two of them warp alike anywhere in this range.</li> : null}
+              {moreCrossings > 0 ? <li>And {count(moreCrossings)} more pairs that cross: see the screen.</li> : null}
             </ul>
             <div className="keep-whole mt-auto border-t-[0.35mm] border-ink tablet:grid tablet:grid-cols-[minmax(0,1fr)_112mm] print:grid print:grid-cols-[minmax(0,1fr)_112mm]">
               <p className={CELL}>

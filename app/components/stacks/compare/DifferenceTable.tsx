@@ -45,7 +45,7 @@ export function DifferenceTable({ asked, stacks, groups }: Props) {
       {shown.length === 0 ? (
         <p className="mt-2">Nothing differs: they are the same in all {all} rows.</p>
       ) : (
-        <div className="mt-2 overflow-x-auto" tabIndex={0} role="region" aria-label="Differences, row by row">
+        <div className="relative mt-2 overflow-x-auto" tabIndex={0} role="region" aria-label="Differences, row by row">
           <table className="table">
             <caption className="sr-only">Figures and inputs of the stacks, side by side</caption>
             <thead>

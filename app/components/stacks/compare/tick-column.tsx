@@ -4,7 +4,7 @@ import { TICK_FORM } from "./CompareTicked.tsx";
 /** Boxes to tick stacks that are to be compared. The form that they belong to stands above the list. */
 export function tickColumn<Row extends { id: string; name: string }>(
   ticked: ReadonlySet<string>,
-  onTick: (id: string, on: boolean) => void,
+  onTick: (form: HTMLFormElement | null) => void,
 ): Column<Row> {
   return {
     key: "tick",
@@ -17,8 +17,8 @@ export function tickColumn<Row extends { id: string; name: string }>(
           name="of"
           value={id}
           form={TICK_FORM}
-          checked={ticked.has(id)}
-          onChange={(event) => onTick(id, event.currentTarget.checked)}
+          defaultChecked={ticked.has(id)}
+          onChange={(event) => onTick(event.currentTarget.form)}
           className="size-4 accent-ink"
         />
       </label>

@@ -34,7 +34,7 @@ export async function loader({ context, url }: Route.LoaderArgs) {
 
 export default function Stacks({ loaderData }: Route.ComponentProps) {
   const { page, flatWithin, programs, mayEdit } = loaderData;
-  const { ticked, tick, clear } = useTicked();
+  const { ticked, read, clear } = useTicked();
   const searched = page.params.query !== "" || Object.values(page.params.filters).some(Boolean);
   const wafers = page.rows.flatMap(({ answer, diameter }) => (answer ? [{ shape: answer.shape, diameter }] : []));
   const add = mayEdit && (
@@ -54,7 +54,7 @@ export default function Stacks({ loaderData }: Route.ComponentProps) {
           <CompareTicked ticked={ticked} onPage={page.rows.map(({ id }) => id)} onClear={clear} />
           <DataTable
             caption="Stacks"
-            columns={[tickColumn(ticked, tick), ...stackColumns(exaggerationOf(wafers), flatWithin)]}
+            columns={[tickColumn(ticked, read), ...stackColumns(exaggerationOf(wafers), flatWithin)]}
             page={page}
             rowKey={({ id }) => id}
           />
