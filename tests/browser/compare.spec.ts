@@ -61,6 +61,7 @@ test.describe("an engineer", () => {
   test("finds another to add, moves and removes them, all in the address", async ({ page }) => {
     const [tern, petrel] = await compare(page, [TERN, PETREL]);
     const search = page.getByRole("searchbox", { name: "Name or program contains" });
+    await page.getByText("Add a stack").click();
     await scriptsAtWork(search);
     await search.fill("pillars fulmar");
     await expect(page.getByText(/^1 of \d/)).toBeVisible();
@@ -182,6 +183,7 @@ test.describe("without scripts", () => {
     await expect(page.getByRole("img", { name: /^Warp against silicon thickness, free wafers/ }).first()).toBeVisible();
     await expect(table(page).getByRole("row", { name: /^Diameter differs/ })).toContainText("300 mm");
     await expect(page.getByRole("button", { name: "PNG" })).toHaveCount(0);
+    await page.getByText("Add a stack").click();
     await page.getByRole("searchbox").fill("fulmar");
     await page.getByRole("button", { name: "Find" }).click();
     await page.getByRole("link", { name: `Add ${FULMAR}` }).click();

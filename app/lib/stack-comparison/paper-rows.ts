@@ -72,7 +72,7 @@ function moverGroup(sensitivities: ComparedView["sensitivities"]): ComparedGroup
         const line = lines[place];
         const none = place === 0 ? (remark ?? "–") : "–";
         return {
-          text: line ? `${line.input} ${line.tolerance}: ${line.moves}` : none,
+          text: line ? `${line.input} ${line.tolerance} moves it ${line.moves}` : none,
           note: null,
           differs: false,
         };

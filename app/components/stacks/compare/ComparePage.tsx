@@ -8,7 +8,6 @@ import type { ComparisonView } from "#app/schemas/stack-comparison.ts";
 import { AddStack } from "./AddStack.tsx";
 import { ChosenStacks } from "./ChosenStacks.tsx";
 import { CompareExports } from "./CompareExports.tsx";
-import { CompareOptions } from "./CompareOptions.tsx";
 import { Compared } from "./Compared.tsx";
 
 /** Stacks side by side: which, over what, and everything that differs. */
@@ -32,15 +31,12 @@ export function ComparePage({ view }: { view: ComparisonView }) {
           Six lines and columns can still be told apart. Remove {count(stacks.length - MOST_STACKS)} below.
         </Notice>
       ) : null}
-      <div className="frame mb-4 grid max-tablet:-mx-4 max-tablet:border-x-0 wide:grid-cols-[minmax(0,1fr)_minmax(0,480px)]">
+      <div className="frame mb-4 max-tablet:-mx-4 max-tablet:border-x-0">
         <ChosenStacks asked={asked} stacks={stacks} chart={compared?.chart ?? null} />
-        <AddStack asked={asked} choices={choices} full={stacks.length >= MOST_STACKS} />
+        <AddStack asked={asked} choices={choices} chosen={stacks.length} />
       </div>
       {compared ? (
-        <>
-          <CompareOptions view={view} faults={compared.faults} />
-          <Compared view={view} compared={compared} />
-        </>
+        <Compared view={view} compared={compared} />
       ) : tooMany ? null : (
         <EmptyState
           title={stacks.length === 0 ? "Nothing to compare yet" : "One stack has nothing to be compared with"}

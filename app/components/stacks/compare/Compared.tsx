@@ -3,6 +3,7 @@ import { ChartFigure } from "#app/components/charts/ChartFigure.tsx";
 import type { ComparedView, ComparisonView } from "#app/schemas/stack-comparison.ts";
 import { chartName } from "./chart-words.ts";
 import { comparisonPlot } from "./comparison-plot.ts";
+import { CompareOptions } from "./CompareOptions.tsx";
 import { Crossings } from "./Crossings.tsx";
 import { DifferenceTable } from "./DifferenceTable.tsx";
 import { Sensitivities } from "./Sensitivities.tsx";
@@ -26,6 +27,7 @@ export function Compared({ view, compared }: { view: ComparisonView; compared: C
         <h2 id="curves" className="mb-2 font-semibold">
           {noBreak(chartName(temperature))}
         </h2>
+        <CompareOptions view={view} faults={compared.faults} />
         {plot.series.length === 0 ? (
           <p className="text-quiet">None of them warps enough in this range for a curve to be drawn.</p>
         ) : (
