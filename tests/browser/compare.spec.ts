@@ -55,7 +55,7 @@ test.describe("an engineer", () => {
     await expect(page.getByRole("region", { name: "Compared" }).getByRole("listitem")).toHaveCount(2);
     await expect(page.getByText(/^A and B /)).toBeVisible();
     await expect(table(page).getByRole("row", { name: /^Curls differs/ })).toContainText("below");
-    await expect(page.getByText(/Stress of Plated copper A ± 10 MPa moves it by ±/).first()).toBeVisible();
+    await expect(page.getByText(/Stress of Plated copper A\s±\s10\sMPa moves it by\s±/).first()).toBeVisible();
   });
 
   test("finds another to add, moves and removes them, all in the address", async ({ page }) => {
@@ -67,7 +67,7 @@ test.describe("an engineer", () => {
     await expect(page.getByText(/^1 of \d/)).toBeVisible();
     await page.getByRole("link", { name: `Add ${FULMAR}` }).click();
     await expect(column(page, 3)).toHaveText(`C ${FULMAR}`);
-    await page.getByRole("link", { name: `Up: ${FULMAR}` }).click();
+    await page.getByRole("link", { name: `Up ${FULMAR}` }).click();
     await expect(column(page, 2)).toHaveText(`B ${FULMAR}`);
     await page.getByRole("link", { name: `Remove ${FULMAR}` }).click();
     await expect(page).toHaveURL(new RegExp(`of=${tern},${petrel}$`));
@@ -162,12 +162,16 @@ test.describe("an engineer", () => {
   for (const scheme of ["light", "dark"] as const)
     test(`meets nothing that axe finds, ${scheme}`, async ({ page }) => {
       await page.emulateMedia({ colorScheme: scheme });
-      await compare(page, [TERN, PETREL, FULMAR]);
+      await compare(page, [TERN, PETREL]);
       await expect(readOut(page)).toBeVisible();
       await expectNoAxeFindings(page);
-      await page.goto("/stacks/compare");
-      await expectNoAxeFindings(page);
     });
+
+  test("meets nothing that axe finds while nothing is chosen", async ({ page }) => {
+    await page.goto("/stacks/compare");
+    await expect(page.getByRole("searchbox")).toBeVisible();
+    await expectNoAxeFindings(page);
+  });
 });
 
 test.describe("without scripts", () => {

@@ -67,7 +67,7 @@ function Move({ to, name, earlier = false }: { to: string | null; name: string; 
   return (
     <Link to={to} replace preventScrollReset className="link inline-flex min-h-8 items-center">
       {word}
-      <span className="sr-only">: {name}</span>
+      <span className="sr-only"> {name}</span>
     </Link>
   );
 }
