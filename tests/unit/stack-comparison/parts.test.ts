@@ -4,6 +4,8 @@ import { estimateStack } from "#app/engine/stack/estimate-stack.ts";
 import { defaultLimits } from "#app/engine/rules/limits.ts";
 import { comparisonSearch, moved, readComparison } from "#app/lib/stack-comparison/asked.ts";
 import { comparedCurves, thicknessLines, warpLines } from "#app/lib/stack-comparison/chart.ts";
+import { comparisonPlot } from "#app/components/stacks/compare/comparison-plot.ts";
+import type { ComparisonChart } from "#app/schemas/stack-comparison.ts";
 import { comparisonCsv } from "#app/lib/stack-comparison/csv.ts";
 import { comparedOver } from "#app/lib/stack-comparison/range.ts";
 import { sensitivityWords, warpMovers } from "#app/lib/stack-comparison/sensitivities.ts";
@@ -148,5 +150,35 @@ describe("the file", () => {
     expect(lines.find((line) => line.includes("stress at 25 C"))).toMatch(/,200,MPa$/);
     expect(lines.find((line) => line.includes("stress tolerance"))).toMatch(/,20,MPa$/);
     expect(RANGE.from).toBe(20e-6);
+  });
+});
+
+describe("the plot", () => {
+  const chart = (scale: "log" | "linear"): ComparisonChart => ({
+    scale,
+    range: { from: 200 * 1e-6, to: 775e-6 },
+    curves: comparedCurves([stack("A", [layer()]), stack("B", [layer({ MPa: 60 })])], { from: 200e-6, to: 775e-6 }),
+    thicknessLimits: [],
+    warpLimits: [{ value: 400e-6, lines: ["400 µm: tool"] }],
+    crossings: [{ x: 300e-6, y: 500e-6, number: 1 }],
+  });
+
+  it("has every tick on its axis, whatever the last digit of the range", () => {
+    for (const { x, y } of [comparisonPlot(chart("log")), comparisonPlot(chart("linear"))])
+      for (const axis of [x, y])
+        for (const { value } of axis.ticks) {
+          expect(value).toBeGreaterThanOrEqual(axis.from);
+          expect(value).toBeLessThanOrEqual(axis.to);
+        }
+    expect(comparisonPlot(chart("linear")).x.ticks[0]?.text).toBe("200");
+  });
+
+  it("tells series apart by dash and marker, shades what is curled and points out dots, bars and crossings", () => {
+    const { series, bands, marks } = comparisonPlot(chart("log"));
+    expect(new Set(series.map(({ dash }) => dash)).size).toBe(2);
+    expect(new Set(series.map(({ marker }) => marker)).size).toBe(2);
+    expect(bands?.length).toBeGreaterThan(0);
+    expect(marks?.filter(({ kind }) => kind === "own")).toHaveLength(2);
+    expect(marks?.filter(({ kind }) => kind === "crossing").map(({ text }) => text)).toEqual(["1"]);
   });
 });

@@ -105,7 +105,8 @@ function warpAxis({ curves, warpLimits, scale }: ComparisonChart) {
 
 function linearTicks(from: number, to: number, unit: number, symbol: string): PlotTick[] {
   return multiples(niceStep((to - from) / 7), from, to).map((value) => ({
-    value,
+    // Powers of ten come out a last digit apart on server and screen: a tick at the end of the axis must lie on it on both.
+    value: Math.min(to, Math.max(from, Number(value.toPrecision(12)))),
     text: `${Number((value / unit).toPrecision(6))}${symbol}`,
   }));
 }
