@@ -14,6 +14,7 @@ export default [
   layout("routes/_print/layout.tsx", [
     route("sheets/:assessmentId", "routes/_print/sheet.tsx"),
     route("assessments/change-request/print", "routes/_print/change-request.tsx"),
+    route("stacks/compare/print", "routes/_print/comparison.tsx"),
   ]),
   layout("routes/_app/layout.tsx", [
     index("routes/_app/today.tsx"),
@@ -30,6 +31,9 @@ export default [
     ...prefix("stacks", [
       index("routes/_app/stacks/list.tsx"),
       route("new", "routes/_app/stacks/new.tsx"),
+      route("compare", "routes/_app/stacks/compare.tsx"),
+      route("compare.csv", "routes/_app/stacks/compare-csv.ts"),
+      route("compare.svg", "routes/_app/stacks/compare-svg.ts"),
       route(":stackId", "routes/_app/stacks/stack.tsx"),
     ]),
     ...prefix("flows", [

@@ -12,9 +12,9 @@ export interface ChartOthers {
 }
 
 /** A warp below this is as good as none and has no place on a logarithmic axis, m. */
-const LEAST_DRAWN = 1e-7;
+export const LEAST_DRAWN = 1e-7;
 /** Lift of the rim over the radius when the roll is half a turn across: beyond it the figure means nothing. */
-const HALF_TURN = 2 / Math.PI;
+export const HALF_TURN = 2 / Math.PI;
 /** Longest name at the end of a line; the table below the chart has the whole one. */
 const LONGEST_NAME = 20;
 
@@ -106,11 +106,11 @@ export function warpChart(room: Estimated, { hot, overlay }: ChartOthers, limits
   };
 }
 
-const shortened = (name: string) =>
+export const shortened = (name: string) =>
   name.length <= LONGEST_NAME ? name : `${name.slice(0, LONGEST_NAME - 1).trimEnd()}…`;
 
 /** The site's thickness limits for a diameter, as lines across the chart. */
-function limitLines(diameter: number, limits: SiteLimits): PlotLimit[] {
+export function limitLines(diameter: number, limits: SiteLimits): PlotLimit[] {
   const keys = thicknessLimits(diameter);
   if (!keys) return [];
   const line = (value: number, words: string) => ({ value, lines: [words, `below ${Math.round(value * 1e6)}`] });

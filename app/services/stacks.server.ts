@@ -73,7 +73,7 @@ function layerDetail(layer: StackLayer): StackLayerDetail {
 }
 
 /** What to ask for a stored stack at 25 °C. */
-function requestOf({ silicon, siliconThickness, layers }: StackDetail): EstimateRequest {
+export function requestOf({ silicon, siliconThickness, layers }: StackDetail): EstimateRequest {
   return {
     wafer: {
       diameter_m: silicon.diameter,
@@ -210,6 +210,25 @@ export async function findStack(scope: ActorScope, id: string): Promise<StackDet
     if (!stack || !mayInProgram(scope.actor, "see the work", stack.program.id)) return null;
     const layers = await layersByStack(em, [stack.id]);
     return detailOf(stack, layers.get(stack.id) ?? [], scope);
+  });
+}
+
+/** Those of some stacks that are there and the person's to see, in the order asked for. */
+export async function findStacks(scope: ActorScope, ids: readonly string[]): Promise<StackDetail[]> {
+  const programs = programsWhere(scope.actor, "see the work").map(({ programId }) => programId);
+  return inScope(scope, async (em) => {
+    const stacks = await em.find(
+      Stack,
+      { id: { $in: [...ids] }, program: { $in: programs } },
+      { populate: ["program", "silicon", "updatedBy"] },
+    );
+    const layers = await layersByStack(
+      em,
+      stacks.map(({ id }) => id),
+    );
+    return ids.flatMap((id) =>
+      stacks.filter((stack) => stack.id === id).map((stack) => detailOf(stack, layers.get(id) ?? [], scope)),
+    );
   });
 }
 

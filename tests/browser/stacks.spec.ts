@@ -250,7 +250,7 @@ test.describe("an engineer", () => {
     await page.goto("/stacks?q=%25_nothing");
     await expect(page.getByRole("heading", { name: "No stack fits" })).toBeVisible();
     await page.goto("/stacks?sort=thickness");
-    const [first, second] = (await page.locator("tbody td:nth-child(4)").allInnerTexts()).map(Number);
+    const [first, second] = (await page.locator("tbody td:nth-child(5)").allInnerTexts()).map(Number);
     expect(first ?? NaN).toBeLessThanOrEqual(second ?? NaN);
   });
 

@@ -5,6 +5,7 @@ import { coordinate } from "./coordinate.ts";
 import { limitLabels } from "./limit-labels.ts";
 import type { Plot, PlotFrame, PlotScales } from "./plot.ts";
 import { PlotMarker } from "./PlotMarker.tsx";
+import { PlotMarks } from "./PlotMarks.tsx";
 import { seriesValue } from "./series-value.ts";
 import { spreadLabels } from "./spread-labels.ts";
 import { textWidth } from "./text-width.ts";
@@ -54,6 +55,7 @@ export function PlotOver(props: PlotOverProps) {
       <YLimits {...props} />
       <Regime {...props} />
       {withoutEndLabels ? null : <Along {...props} />}
+      <PlotMarks plot={plot} frame={frame} scales={scales} textSize={textSize} />
       <Chosen {...props} />
       {withoutEndLabels ? null : <EndLabels plot={plot} frame={frame} scales={scales} textSize={textSize} />}
     </>
@@ -85,16 +87,20 @@ function XLimits(props: PlotOverProps) {
   const widths = limits.map((limit) => Math.max(...limit.lines.map((line) => textWidth(line, textSize))));
   const places = limitLabels(lines, widths, otherVerticals(props), frame);
   const lineHeight = textSize * 1.2;
-  return limits.map((limit, index) => {
+  // All lines before all words: a line must not run through the words of another.
+  const drawn = limits.map((limit, index) => (
+    <path
+      key={limit.value}
+      d={`M${coordinate(lines[index] ?? 0)} ${frame.top}V${frame.bottom}`}
+      stroke={colour("ink")}
+      strokeDasharray="2 3"
+    />
+  ));
+  const words = limits.map((limit, index) => {
     const place = places[index] ?? { x: 0, anchor: "start", tier: 0 };
     const last = frame.bottom - 11 - place.tier * (limit.lines.length * lineHeight + 4);
     return (
       <g key={limit.value}>
-        <path
-          d={`M${coordinate(lines[index] ?? 0)} ${frame.top}V${frame.bottom}`}
-          stroke={colour("ink")}
-          strokeDasharray="2 3"
-        />
         {limit.lines.map((line, row) => (
           <text
             key={line}
@@ -113,6 +119,12 @@ function XLimits(props: PlotOverProps) {
       </g>
     );
   });
+  return (
+    <>
+      {drawn}
+      {words}
+    </>
+  );
 }
 
 function YLimits(props: PlotOverProps) {

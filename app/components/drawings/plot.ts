@@ -1,8 +1,8 @@
 import type { ColourToken } from "./colour.ts";
 
 /** Line of a series. Series differ by dash and marker as well as by hue, so that black on paper reads the same. */
-export type PlotDash = "solid" | "chain" | "dotted" | "long" | "reference" | "none";
-export type PlotMarker = "circle" | "square" | "triangle" | "dash" | "none";
+export type PlotDash = "solid" | "chain" | "dotted" | "long" | "double" | "sparse" | "reference" | "none";
+export type PlotMarker = "circle" | "square" | "triangle" | "diamond" | "cross" | "down" | "dash" | "none";
 
 /** Dash lengths and line width, px. */
 export const PLOT_DASHES: Readonly<Record<PlotDash, { array: string | undefined; width: number }>> = {
@@ -10,6 +10,8 @@ export const PLOT_DASHES: Readonly<Record<PlotDash, { array: string | undefined;
   chain: { array: "9 3 2 3", width: 1.6 },
   dotted: { array: "2 2.5", width: 1.8 },
   long: { array: "8 3", width: 1.4 },
+  double: { array: "13 3 2 3 2 3", width: 1.6 },
+  sparse: { array: "4 4", width: 1.6 },
   reference: { array: "5 4", width: 1 },
   none: { array: undefined, width: 0 },
 };
@@ -72,6 +74,17 @@ export interface PlotLimit {
   lines: readonly string[];
 }
 
+/**
+ * A place of a plot that is pointed out: the value that a series is for, the place where it begins to curl, or a numbered crossing of
+ * two of them.
+ */
+export interface PlotMark extends PlotPoint {
+  kind: "own" | "onset" | "crossing";
+  colourToken: ColourToken;
+  /** of a crossing */
+  text?: string;
+}
+
 /** A plot as data. The chart on a screen and the drawing on paper are made from the same one. */
 export interface Plot {
   x: PlotAxis;
@@ -88,6 +101,7 @@ export interface Plot {
   /** Stretches of x that were left out, ruled with level lines. */
   leftOut?: readonly PlotStretch[];
   bands?: readonly PlotBand[];
+  marks?: readonly PlotMark[];
 }
 
 /** Bounds of the plotting area, px. */

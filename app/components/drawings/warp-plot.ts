@@ -74,14 +74,14 @@ export function warpPlot(input: WarpPlotInput): Plot {
   return warp === null ? plot : { ...plot, chosen: { x: input.chosenThickness, y: warp } };
 }
 
-function doublings(first: number, last: number): number[] {
+export function doublings(first: number, last: number): number[] {
   const values: number[] = [];
   for (let value = first; value < last; value *= 2) values.push(value);
   return values;
 }
 
 /** 1, 2 and 5 of every decade within a range. */
-function oneTwoFive(from: number, to: number): { value: number; digit: number }[] {
+export function oneTwoFive(from: number, to: number): { value: number; digit: number }[] {
   const values: { value: number; digit: number }[] = [];
   for (let decade = Math.floor(Math.log10(from)); decade <= Math.log10(to); decade += 1) {
     for (const digit of [1, 2, 5]) {
@@ -93,7 +93,7 @@ function oneTwoFive(from: number, to: number): { value: number; digit: number }[
 }
 
 /** 1, 2, 5 of every decade in micrometres, and the full thickness where it is not close to one of them. */
-function thicknessTicks(from: number, to: number): PlotTick[] {
+export function thicknessTicks(from: number, to: number): PlotTick[] {
   const values = oneTwoFive(from * 0.999, to).map(({ value }) => value);
   const last = values.at(-1) ?? from;
   if (to / last > 1.3) values.push(to);
@@ -105,6 +105,6 @@ function thicknessTicks(from: number, to: number): PlotTick[] {
 }
 
 /** A power of ten of metres in the unit that keeps it short. */
-function decadeText(metres: number): string {
+export function decadeText(metres: number): string {
   return metres >= 0.999e-3 ? `${Math.round(metres * 1000)} mm` : `${Math.round(metres / MICROMETRE)} µm`;
 }

@@ -1,4 +1,4 @@
-import { reachedWaferShape } from "../plate/free-wafer-shape.ts";
+import { reachedWaferShape, type ReachedWaferShape } from "../plate/free-wafer-shape.ts";
 import { firstOrderSpread, type FirstOrderSpread } from "../uncertainty/first-order-spread.ts";
 import type { ScalarModel } from "../uncertainty/model.ts";
 import type { UncertainQuantity } from "../uncertainty/quantity.ts";
@@ -35,15 +35,18 @@ function varied({ wafer, films }: StackInput): Varied[] {
   return found;
 }
 
-/** The warp of the free wafer, m, as a function of everything in the stack that has a tolerance. */
-export function warpModel(stack: StackInput): { inputs: UncertainQuantity[]; model: ScalarModel } {
+/** A figure of the free wafer as a function of everything in the stack that has a tolerance; the warp, m, unless another is asked. */
+export function warpModel(
+  stack: StackInput,
+  figure: (shape: ReachedWaferShape) => number = ({ warp }) => warp,
+): { inputs: UncertainQuantity[]; model: ScalarModel } {
   const parts = varied(stack);
   return {
     inputs: parts.map(({ input }) => input),
     model: (values) => {
       const copy = { ...stack, wafer: { ...stack.wafer }, films: stack.films.map((film) => ({ ...film })) };
       parts.forEach(({ put }, n) => put(copy, values[n] ?? 0));
-      return reachedWaferShape(freeDisc(copy).disc).warp;
+      return figure(reachedWaferShape(freeDisc(copy).disc));
     },
   };
 }
@@ -55,5 +58,11 @@ export function warpModel(stack: StackInput): { inputs: UncertainQuantity[]; mod
  */
 export function warpUncertainty(stack: StackInput): FirstOrderSpread | null {
   const { inputs, model } = warpModel(stack);
+  return inputs.length === 0 ? null : firstOrderSpread(model, inputs);
+}
+
+/** The same of its bow along the axis that bends most, m. */
+export function bowUncertainty(stack: StackInput): FirstOrderSpread | null {
+  const { inputs, model } = warpModel(stack, ({ bowMajor }) => bowMajor);
   return inputs.length === 0 ? null : firstOrderSpread(model, inputs);
 }

@@ -1,5 +1,8 @@
 import { Link } from "react-router";
 import { PageHead } from "#app/components/layout/PageHead.tsx";
+import { CompareTicked } from "#app/components/stacks/compare/CompareTicked.tsx";
+import { tickColumn } from "#app/components/stacks/compare/tick-column.tsx";
+import { useTicked } from "#app/components/stacks/compare/use-ticked.ts";
 import { exaggerationOf } from "#app/components/stacks/bow-of.ts";
 import { stackColumns } from "#app/components/stacks/stack-columns.tsx";
 import { DataTable } from "#app/components/ui/DataTable.tsx";
@@ -31,6 +34,7 @@ export async function loader({ context, url }: Route.LoaderArgs) {
 
 export default function Stacks({ loaderData }: Route.ComponentProps) {
   const { page, flatWithin, programs, mayEdit } = loaderData;
+  const { ticked, read, clear } = useTicked();
   const searched = page.params.query !== "" || Object.values(page.params.filters).some(Boolean);
   const wafers = page.rows.flatMap(({ answer, diameter }) => (answer ? [{ shape: answer.shape, diameter }] : []));
   const add = mayEdit && (
@@ -46,12 +50,15 @@ export default function Stacks({ loaderData }: Route.ComponentProps) {
         filters={programs.length > 1 ? [{ name: "program", label: "Program", options: programs }] : []}
       />
       {page.rows.length > 0 ? (
-        <DataTable
-          caption="Stacks"
-          columns={stackColumns(exaggerationOf(wafers), flatWithin)}
-          page={page}
-          rowKey={({ id }) => id}
-        />
+        <>
+          <CompareTicked ticked={ticked} onPage={page.rows.map(({ id }) => id)} onClear={clear} />
+          <DataTable
+            caption="Stacks"
+            columns={[tickColumn(ticked, read), ...stackColumns(exaggerationOf(wafers), flatWithin)]}
+            page={page}
+            rowKey={({ id }) => id}
+          />
+        </>
       ) : (
         <EmptyState title={searched ? "No stack fits" : "No stacks yet"} actions={add}>
           {searched

@@ -36,19 +36,24 @@ export default function Stack({ loaderData, actionData }: Route.ComponentProps) 
         crumbs={[{ name: "Stacks", path: "/stacks" }]}
         remark={`${program.name}. Last changed ${stamp.updatedAt.slice(0, 10)}, ${stamp.updatedBy}`}
         actions={
-          mayEdit && (
-            <>
-              <Link to={`/stacks/new?from=${id}`} className="btn">
-                Copy
-              </Link>
-              <Link to={`/flows/new?stack=${id}`} className="btn">
-                Use in a flow
-              </Link>
-              <SubmitButton busy="Saving" form={STACK_FORM}>
-                Save stack
-              </SubmitButton>
-            </>
-          )
+          <>
+            <Link to={`/stacks/compare?of=${id}`} className="btn">
+              Compare
+            </Link>
+            {mayEdit && (
+              <>
+                <Link to={`/stacks/new?from=${id}`} className="btn">
+                  Copy
+                </Link>
+                <Link to={`/flows/new?stack=${id}`} className="btn">
+                  Use in a flow
+                </Link>
+                <SubmitButton busy="Saving" form={STACK_FORM}>
+                  Save stack
+                </SubmitButton>
+              </>
+            )}
+          </>
         }
       />
       {mayEdit ? (

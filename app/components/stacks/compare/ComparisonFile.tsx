@@ -1,0 +1,47 @@
+import { PrintPlot } from "#app/components/drawings/PrintPlot.tsx";
+import { PlotKey } from "./PlotKey.tsx";
+import type { ComparedView, ComparisonView } from "#app/schemas/stack-comparison.ts";
+import { comparisonPlot } from "./comparison-plot.ts";
+import { chartName } from "./chart-words.ts";
+
+interface Props {
+  stacks: ComparisonView["stacks"];
+  compared: ComparedView;
+}
+
+const WIDTH = 800;
+const PLOT = 480;
+const HEAD = 34;
+const ROW = 20;
+
+/** The chart as a drawing that stands by itself: what it shows above it, the whole names of the stacks below. */
+export function ComparisonFile({ stacks, compared }: Props) {
+  const plot = comparisonPlot(compared.chart);
+  const name = chartName(compared.temperature);
+  const height = HEAD + PLOT + ROW * (stacks.length + 1);
+  return (
+    <svg
+      xmlns="http://www.w3.org/2000/svg"
+      width={WIDTH}
+      height={height}
+      viewBox={`0 0 ${WIDTH} ${height}`}
+      fontFamily="'Noto Sans', Arial, sans-serif"
+      fontSize="12.5"
+    >
+      <title>{name}</title>
+      <rect width={WIDTH} height={height} fill="#ffffff" />
+      <text x="12" y="22" fontWeight="600" fontSize="14">
+        {name}
+      </text>
+      <svg y={HEAD} width={WIDTH} height={PLOT}>
+        <PrintPlot plot={plot} label={name} width={WIDTH} height={PLOT} />
+      </svg>
+      {stacks.map(({ letter, name: stack, program }, n) => (
+        <g key={letter} transform={`translate(12 ${HEAD + PLOT + ROW * (n + 1)})`}>
+          <PlotKey plot={plot} letter={letter} />
+          <text x="52" y="4">{`${letter}  ${stack} (${program})`}</text>
+        </g>
+      ))}
+    </svg>
+  );
+}
