@@ -100,6 +100,8 @@ export default [
       route(":instrumentId/study", "routes/_app/instruments/study.tsx"),
       route(":instrumentId/reference", "routes/_app/instruments/reference.tsx"),
     ]),
+    route("search", "routes/_app/search.tsx"),
+    route("search/found", "routes/_app/search-found.ts"),
     route("jobs", "routes/_app/jobs.tsx"),
     route("sheets", "routes/_app/sheets/list.tsx"),
     route("method", "routes/_app/method.tsx"),

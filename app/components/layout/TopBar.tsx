@@ -1,6 +1,7 @@
 import { useEffect, useRef } from "react";
 import { Form, Link, useLocation } from "react-router";
 import { Mark } from "#app/components/drawings/Mark.tsx";
+import { SearchOpener } from "#app/components/search/SearchOpener.tsx";
 import { liesIn } from "#app/lib/current-place.ts";
 import type { Place } from "#app/policies/places.ts";
 
@@ -9,7 +10,7 @@ interface Props {
   places: Place[];
 }
 
-/** Mark, who am I, and the places in the order of the job. */
+/** Mark, search, who am I, and the places in the order of the job. */
 export function TopBar({ person, places }: Props) {
   const { pathname } = useLocation();
   const row = useRef<HTMLElement>(null);
@@ -30,6 +31,7 @@ export function TopBar({ person, places }: Props) {
           <Mark />
           <span>Planeward</span>
         </Link>
+        <SearchOpener />
         <p className="relative ml-auto min-w-0 truncate text-quiet">
           {person.name}
           <span className="max-tablet:sr-only">, {person.role}</span>

@@ -12,11 +12,12 @@ import { PLATE } from "#app/engine/equations/plate.ts";
 import { SILICON } from "#app/engine/equations/silicon.ts";
 import { STRENGTH } from "#app/engine/equations/strength.ts";
 import { THIN_FILM } from "#app/engine/equations/thin-film.ts";
+import { METHOD_SECTIONS } from "#app/lib/method-sections.ts";
+import { CONVENTIONS, GLOSSARY, leftOut } from "#app/lib/method-words.ts";
 import type { RuleText } from "#app/schemas/rule-text.ts";
 import { Bibliography } from "./Bibliography.tsx";
 import { EquationEntry } from "./EquationEntry.tsx";
 import { MethodSection } from "./MethodSection.tsx";
-import { CONVENTIONS, GLOSSARY, leftOut } from "./method-words.ts";
 import { RuleEntry } from "./RuleEntry.tsx";
 import { TermList } from "./TermList.tsx";
 
@@ -33,17 +34,6 @@ const GROUPS: readonly { id: string; title: string; equations: Record<string, Eq
   { id: "metrology", title: "Scans and uncertainty", equations: METROLOGY },
   { id: "handling", title: "Handling", equations: HANDLING },
 ];
-
-export const METHOD_SECTIONS = [
-  { id: "model", title: "What is computed" },
-  { id: "conventions", title: "Signs and words" },
-  { id: "rules", title: "Handling rules" },
-  { id: "equations", title: "Equations" },
-  { id: "left-out", title: "What is left out" },
-  { id: "cautions", title: "Cautions" },
-  { id: "glossary", title: "Glossary" },
-  { id: "sources", title: "Sources" },
-] as const;
 
 interface Props {
   rules: RuleText[];
