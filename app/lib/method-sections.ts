@@ -7,6 +7,7 @@ export const METHOD_SECTIONS = [
   { id: "left-out", title: "What is left out" },
   { id: "cautions", title: "Cautions" },
   { id: "glossary", title: "Glossary" },
+  { id: "keys", title: "Keys" },
   { id: "sources", title: "Sources" },
 ] as const;
 

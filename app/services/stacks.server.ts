@@ -18,6 +18,7 @@ import type { StackValues } from "#app/schemas/stack.ts";
 import { notFound, problem } from "#app/server/problem.server.ts";
 import { inScope, type ActorScope } from "#app/server/scope.server.ts";
 import { answerOrNull } from "./estimate-answer.ts";
+import { favouriteIds } from "./kept/favourites.server.ts";
 import { everyWord } from "./like.server.ts";
 import { readLimits } from "./limits.server.ts";
 import { requireInProgram } from "./permission.server.ts";
@@ -149,6 +150,7 @@ export async function listStacks(
       Stack,
       {
         program: programFilter(scope.actor, "see the work", params.filters["program"]),
+        ...(params.filters["favourites"] ? { id: { $in: await favouriteIds(em, scope, "stack") } } : {}),
         ...(params.query ? everyWord(params.query, (name) => ({ name })) : {}),
       },
       {

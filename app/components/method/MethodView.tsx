@@ -1,4 +1,6 @@
+import { Link } from "react-router";
 import { Cautions } from "#app/components/cautions/Cautions.tsx";
+import { ShortcutList } from "#app/components/keyboard/ShortcutList.tsx";
 import { noBreak } from "#app/components/drawings/no-break.ts";
 import type { Equation } from "#app/engine/equations.ts";
 import { CHUCK } from "#app/engine/equations/chuck.ts";
@@ -99,6 +101,16 @@ export function MethodView({ rules, engineVersion }: Props) {
       </MethodSection>
       <MethodSection id="glossary" title="Glossary">
         <TermList terms={GLOSSARY} />
+      </MethodSection>
+      <MethodSection id="keys" title="Keys">
+        <ShortcutList />
+        <p className="mt-2 text-quiet">
+          The key ? can be switched off in the{" "}
+          <Link to="/preferences" className="link">
+            preferences
+          </Link>
+          .
+        </p>
       </MethodSection>
       <MethodSection id="sources" title="Sources">
         <Bibliography />

@@ -1,34 +1,26 @@
-import { useCallback, useEffect, useState, type ComponentType, type MouseEvent } from "react";
+import { useEffect, type MouseEvent } from "react";
 import { Link } from "react-router";
+import { useOnDemand } from "#app/components/layout/use-on-demand.tsx";
 
-type PaletteView = ComponentType<{ onClose: () => void }>;
+const loadPalette = () => import("./Palette.tsx");
 
 /** The way to the search from every page: a link to its page, which opens the palette instead where there are scripts. */
 export function SearchOpener() {
-  // The palette is loaded when it is first asked for.
-  const [Palette, setPalette] = useState<PaletteView | null>(null);
-  const [open, setOpen] = useState(false);
-  const begin = useCallback(() => {
-    setOpen(true);
-    import("./Palette.tsx").then(
-      (loaded) => setPalette(() => loaded.default),
-      () => window.location.assign("/search"),
-    );
-  }, []);
+  const { dialog, show } = useOnDemand(loadPalette, "/search");
   useEffect(() => {
     const press = (event: KeyboardEvent) => {
       if (!(event.ctrlKey || event.metaKey) || event.altKey || event.shiftKey || event.key.toLowerCase() !== "k")
         return;
       event.preventDefault();
-      begin();
+      show();
     };
     window.addEventListener("keydown", press);
     return () => window.removeEventListener("keydown", press);
-  }, [begin]);
+  }, [show]);
   const click = (event: MouseEvent) => {
     if (event.ctrlKey || event.metaKey || event.shiftKey) return;
     event.preventDefault();
-    begin();
+    show();
   };
   return (
     <>
@@ -46,7 +38,7 @@ export function SearchOpener() {
         <span className="max-tablet:hidden">Search</span>
         <span className="ml-auto text-label max-tablet:hidden">Ctrl K</span>
       </Link>
-      {open && Palette && <Palette onClose={() => setOpen(false)} />}
+      {dialog}
     </>
   );
 }

@@ -6,6 +6,7 @@ import type { FlowDetail, FlowRow } from "#app/schemas/flow-view.ts";
 import type { FlowValues } from "#app/schemas/flow.ts";
 import { problem } from "#app/server/problem.server.ts";
 import { inScope, type ActorScope } from "#app/server/scope.server.ts";
+import { favouriteIds } from "../kept/favourites.server.ts";
 import { everyWord } from "../like.server.ts";
 import { requireInProgram, requireInSomeProgram } from "../permission.server.ts";
 import { programFilter } from "../program-filter.server.ts";
@@ -24,6 +25,7 @@ export async function listFlows(scope: ActorScope, params: ListParams): Promise<
       Flow,
       {
         program: programFilter(scope.actor, "see the work", params.filters["program"]),
+        ...(params.filters["favourites"] ? { id: { $in: await favouriteIds(em, scope, "flow") } } : {}),
         ...(params.query ? everyWord(params.query, (name) => ({ name })) : {}),
       },
       {

@@ -18,6 +18,7 @@ const EMPTY: TodayView = {
   notAssessed: none,
   scans: [],
   programs: [PROGRAM],
+  kept: [],
 };
 const ASSESSED: TodayAssessed = {
   id: "flow",
