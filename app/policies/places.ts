@@ -27,6 +27,8 @@ const seesWork = (actor: Actor) => programsWhere(actor, "see the work").length >
 const seesLibrary = (actor: Actor) => mayOnSite(actor, "see the library");
 
 const WITHIN: (Page & { open: (actor: Actor) => boolean })[] = [
+  { name: "Favourites", path: "/favourites", also: "marked, starred", open: seesLibrary },
+  { name: "Preferences", path: "/preferences", also: "theme, dark, density, settings", open: () => true },
   { name: "Carriers", path: "/carriers/carriers", open: seesLibrary },
   { name: "Bonding materials", path: "/carriers/bonding-materials", also: "adhesives", open: seesLibrary },
   { name: "Tapes", path: "/carriers/tapes", open: seesLibrary },
@@ -46,12 +48,6 @@ const WITHIN: (Page & { open: (actor: Actor) => boolean })[] = [
   { name: "Work under way", path: "/jobs", also: "jobs", open: seesWork },
 ];
 
-/** What every signed-in person may open. */
-const ANYBODYS: Page[] = [
-  { name: "Favourites", path: "/favourites", also: "marked, starred" },
-  { name: "Preferences", path: "/preferences", also: "theme, dark, density, settings" },
-];
-
 function mayUpload(actor: Actor): boolean {
   return programsWhere(actor, "upload scans").length > 0;
 }
@@ -59,7 +55,7 @@ function mayUpload(actor: Actor): boolean {
 /** Every page that the actor may open without saying of what: the places, and what lies within them. */
 export function pagesFor(actor: Actor): Page[] {
   const within = WITHIN.filter(({ open }) => open(actor));
-  return [...placesFor(actor), ...ANYBODYS, ...within.map(({ name, path, also }) => ({ name, path, also }))];
+  return [...placesFor(actor), ...within.map(({ name, path, also }) => ({ name, path, also }))];
 }
 
 /** The places that the actor may open. */

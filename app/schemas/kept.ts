@@ -1,6 +1,7 @@
 import { z } from "zod";
 import { KEPT_KINDS } from "#app/lib/kept-kinds.ts";
 import type { Preferences } from "#app/lib/preferences.ts";
+import { keepsSearches } from "#app/lib/saved-list.ts";
 
 /** A search of a list that is kept under a name. */
 export interface SavedFilterRow {
@@ -28,10 +29,7 @@ export const favouriteFormSchema = z.object({
 
 /** A search to keep: of which list, under which name. */
 export const savedFilterFormSchema = z.object({
-  list: z
-    .string()
-    .regex(/^\/[a-z][a-z/-]{0,80}$/)
-    .refine((list) => !list.includes("//")),
+  list: z.string().max(90).refine(keepsSearches),
   query: z.string().min(1).max(600),
   name: z.string().trim().min(1, "Give it a name.").max(60, "At most 60 characters."),
 });

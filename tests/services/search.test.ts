@@ -125,7 +125,7 @@ describe("what lies beyond a person's reach", () => {
       for (const { path } of groups.flatMap(({ rows }) => rows))
         expect(path).toMatch(/^\/(sheets|method.*|preferences|search)?$/);
     }
-    expect(namesOf(await found(guest, "e"), "place")).toEqual(["Sheets", "Method"]);
+    expect(namesOf(await found(guest, "e"), "place")).toEqual(["Sheets", "Method", "Preferences"]);
   });
 
   test("an administrator finds the library and nothing of the programs' work", async () => {

@@ -37,7 +37,8 @@ export function PageHead({ title, remark, crumbs, actions }: Props) {
         </div>
       </div>
       <p className="self-end pb-1 text-quiet">
-        {remark} <MethodLink />
+        {remark && <span className="mr-3">{remark}</span>}
+        <MethodLink />
       </p>
       {actions && <div className="ml-auto flex flex-wrap gap-2">{actions}</div>}
     </div>

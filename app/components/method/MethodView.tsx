@@ -1,4 +1,3 @@
-import { Link } from "react-router";
 import { Cautions } from "#app/components/cautions/Cautions.tsx";
 import { ShortcutList } from "#app/components/keyboard/ShortcutList.tsx";
 import { noBreak } from "#app/components/drawings/no-break.ts";
@@ -105,11 +104,7 @@ export function MethodView({ rules, engineVersion }: Props) {
       <MethodSection id="keys" title="Keys">
         <ShortcutList />
         <p className="mt-2 text-quiet">
-          The key ? can be switched off in the{" "}
-          <Link to="/preferences" className="link">
-            preferences
-          </Link>
-          .
+          The key ? can be switched off in the preferences, which open by your name above.
         </p>
       </MethodSection>
       <MethodSection id="sources" title="Sources">

@@ -50,7 +50,8 @@ export default function Palette({ onClose }: { onClose: () => void }) {
     >
       <div className="flex items-center gap-2 border-b border-ink p-2">
         <input
-          type="search"
+          type="text"
+          inputMode="search"
           role="combobox"
           aria-label="Name or number of anything that you may open"
           aria-expanded={options.length > 0}

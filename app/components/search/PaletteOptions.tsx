@@ -29,7 +29,7 @@ export function PaletteOptions({ id, options, at, onOpen }: Props) {
                 tabIndex={-1}
                 to={path}
                 onClick={onOpen}
-                className="flex min-h-9 flex-wrap items-baseline gap-x-2 rounded px-2 py-1.5 text-inherit no-underline hover:bg-wash aria-selected:bg-wash aria-selected:outline aria-selected:outline-edge"
+                className="flex min-h-9 flex-wrap content-center items-baseline gap-x-2 rounded px-2 py-1 max-tablet:min-h-11 text-inherit no-underline hover:bg-wash aria-selected:bg-wash aria-selected:outline aria-selected:outline-edge"
               >
                 <span className="wrap-anywhere">{name}</span>
                 {about && <span className="text-label text-quiet">{about}</span>}

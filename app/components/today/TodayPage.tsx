@@ -27,7 +27,7 @@ export function TodayPage({ view }: { view: TodayView }) {
           {!mayAssess && scans}
           {flows === 0 && (
             <div className="mb-6">
-              <FirstSteps stacks={stacks} mayAssess={mayAssess} />
+              <FirstSteps stacks={stacks} scans={view.scans.length} mayAssess={mayAssess} mayUpload={view.mayUpload} />
             </div>
           )}
           {decisions.total > 0 && (

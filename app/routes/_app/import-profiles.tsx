@@ -1,4 +1,4 @@
-import { data, redirect } from "react-router";
+import { data, Link, redirect } from "react-router";
 import { ImportProfileList, type ProfileAnswer } from "#app/components/scans/ImportProfileList.tsx";
 import { PageHead } from "#app/components/layout/PageHead.tsx";
 import { EmptyState } from "#app/components/ui/EmptyState.tsx";
@@ -73,7 +73,16 @@ export default function ImportProfiles({ loaderData, actionData }: Route.Compone
       {profiles.length > 0 ? (
         <ImportProfileList profiles={profiles} answer={actionData ?? null} />
       ) : (
-        <EmptyState title={query === "" ? "No profile is kept yet" : "No instrument fits"}>
+        <EmptyState
+          title={query === "" ? "No profile is kept yet" : "No instrument fits"}
+          actions={
+            query === "" && (
+              <Link to="/scans/import" className="btn">
+                Import scans
+              </Link>
+            )
+          }
+        >
           {query === ""
             ? "When you import a file, keep how it was read under the name of its instrument."
             : "Change the search."}

@@ -55,14 +55,6 @@ export const FINDABLE = {
     walled: true,
     open: seesWork,
   },
-  step: {
-    title: "Steps of flows",
-    rows: `select x.id, x.title as name, f.name as about, '' as also,
-                  '/flows/' || x.flow_id || '/steps/' || x.id as path, x.program_id
-             from flow_step x join flow f on f.id = x.flow_id`,
-    walled: true,
-    open: seesWork,
-  },
   film: ofSite("Films", "film", "/films", "kind"),
   scan: {
     title: "Scans",
@@ -89,6 +81,14 @@ export const FINDABLE = {
     rows: `select x.id, x.name, concat_ws(', ', 'lot ' || l.name, 'slot ' || x.slot, p.name) as about,
                   coalesce(l.name, '') as also, '/wafers/' || x.id as path, x.program_id
              from wafer x join program p on p.id = x.program_id left join lot l on l.id = x.lot_id`,
+    walled: true,
+    open: seesWork,
+  },
+  step: {
+    title: "Steps of flows",
+    rows: `select x.id, x.title as name, f.name as about, '' as also,
+                  '/flows/' || x.flow_id || '/steps/' || x.id as path, x.program_id
+             from flow_step x join flow f on f.id = x.flow_id`,
     walled: true,
     open: seesWork,
   },

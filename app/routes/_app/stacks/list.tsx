@@ -45,7 +45,11 @@ export default function Stacks({ loaderData }: Route.ComponentProps) {
   );
   return (
     <>
-      <PageHead title="Stacks" remark={`${page.total} ${searched ? "found" : "stacks"}`} actions={add} />
+      <PageHead
+        title="Stacks"
+        remark={`${page.total} ${searched ? "found" : page.total === 1 ? "stack" : "stacks"}`}
+        actions={add}
+      />
       <ListHead
         what="stacks"
         filters={[
