@@ -17,10 +17,12 @@ export function keptFileSentence(kept: KeptFile): string {
   return `${text.charAt(0).toUpperCase()}${text.slice(1)}.`;
 }
 
-/** Where to see what came of it: the first scan, else the file that waits, else the lot; null where there is no page. */
+/** Where to see what came of it: the first scan, else the file that waits, else the wafer or lot; null where there is no page. */
 export function keptFilePath(kept: KeptFile): string | null {
   if (kept.outcome !== "placed") {
-    const [lot] = kept.outcome === "measured" ? kept.lots : [];
+    if (kept.outcome === "known table") return null;
+    const [lot] = kept.lots;
+    if (kept.only !== null) return `/wafers/${kept.only}`;
     return lot ? `/lots/${lot.id}` : null;
   }
   const scan = kept.placed.flatMap((placed) => (placed.outcome === "waits" ? [] : (placed.scan ?? []))).at(0);

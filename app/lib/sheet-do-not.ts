@@ -98,7 +98,7 @@ function releaseLines({ holding, steps }: SheetGroup, flow: readonly StepResult[
   const radii = steps.flatMap(({ number, released }) =>
     number < diced && isRolled(released) ? [released.rollRadius] : [],
   );
-  return radii.length === 0 ? [] : [`Do not release: it rolls to about ${roundedRadius(Math.min(...radii))}`];
+  return radii.length === 0 ? [] : [`Do not release: rolls to about ${roundedRadius(Math.min(...radii))}`];
 }
 
 const onTape = (holding: Holding) => holding === "grinding tape" || holding === "film frame";

@@ -92,6 +92,8 @@ export type KeptFile =
       kind: string;
       /** wafers of which the table says something new */
       wafers: number;
+      /** id of the wafer where there is no other */
+      only: string | null;
       lots: { id: string; name: string }[];
     }
   | { outcome: "known table"; reading: string; before: BroughtInBefore };

@@ -1,6 +1,6 @@
 import type { Page } from "@playwright/test";
 import { assessTern } from "./assess.ts";
-import { expect, expectNoAxeFindings, signIn, test } from "./support.ts";
+import { expect, expectNoAxeFindings, signIn, signInAtToday, test } from "./support.ts";
 
 test.slow();
 
@@ -10,7 +10,7 @@ const current = (page: Page) => places(page).locator("[aria-current=page]");
 for (const width of [390, 320])
   test(`a phone of ${width} px has the bar on one line and the current place in sight`, async ({ page }) => {
     await page.setViewportSize({ width, height: 700 });
-    await signIn(page, "process owner");
+    await signInAtToday(page, "process owner");
     const [home, person, out] = [
       page.getByRole("link", { name: "Planeward, Today" }),
       page.getByText("Mikael Lindqvist"),

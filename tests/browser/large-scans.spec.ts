@@ -39,6 +39,7 @@ test.describe("a pair beyond a megabyte", () => {
     await page.waitForURL("/jobs", { timeout: 30_000 });
     await page.goto("/scans");
     await page.getByRole("link", { name: "Work under way" }).click();
+    await expect(page.getByRole("heading", { level: 1, name: "Work under way" })).toBeVisible();
     await page.getByRole("searchbox").fill(label);
     await page.getByRole("button", { name: "Show" }).click();
     const job = page.getByRole("listitem").filter({ hasText: label });

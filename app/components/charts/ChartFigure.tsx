@@ -41,7 +41,7 @@ export function ChartFigure({ plot, label, summary, xName }: ChartFigureProps) {
           drawing
         )}
       </div>
-      <div className="print-only">
+      <div className="print-only max-w-[118mm]">
         <PrintPlot plot={plot} label={label} />
       </div>
       <div className="mt-2 @min-[560px]:hidden print:hidden">

@@ -20,6 +20,7 @@ export function PredictionsPage({ predictions }: { predictions: Predictions }) {
     <>
       <PageHead
         title="Predicted against measured"
+        crumbs={[{ name: "Scans", path: "/scans" }]}
         remark={points.length === 1 ? "1 point" : `${points.length} points`}
         actions={
           points.length > 0 && (

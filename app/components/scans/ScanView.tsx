@@ -51,7 +51,7 @@ export function ScanView({ scan }: { scan: ScanDetail }) {
             />
           </section>
           {!result.curled && (
-            <div className="grid border-t border-line tablet:grid-cols-2">
+            <div className="grid border-t border-line tablet:grid-cols-2 print:grid-cols-1">
               <div className="min-w-0 space-y-6 p-4 tablet:p-6">
                 {analysis ? (
                   <>

@@ -1,3 +1,4 @@
+import { keptFilePath } from "#app/lib/kept-file.ts";
 import { count } from "#app/lib/count-words.ts";
 import type { BroughtInBefore, KeptFile, PlacedProfile } from "#app/schemas/scan-import.ts";
 
@@ -59,14 +60,13 @@ function tableResult(file: string, key: string, answer: Exclude<KeptFile, { outc
   if (answer.outcome === "known table")
     return { ...line, outcome: "already", path: null, words: importedBefore(answer.before), undo: null };
   const { kind, wafers, lots, reading } = answer;
-  const [lot] = lots;
   const of = wafers === 1 ? "one wafer" : `${count(wafers)} wafers`;
   const named =
     lots.length === 0 ? "" : `, ${lots.length === 1 ? "lot" : "lots"} ${lots.map(({ name }) => name).join(", ")}`;
   return {
     ...line,
     outcome: "measured",
-    path: lot ? `/lots/${lot.id}` : null,
+    path: keptFilePath(answer),
     words: `is in, a ${kind} of ${of}${named}`,
     undo: { what: "table", id: reading },
   };

@@ -56,6 +56,7 @@ export async function keepTable(
     reading: reading.id,
     kind: result.content.kind,
     wafers: wafers.size,
+    only: wafers.size === 1 ? ([...wafers.keys()][0] ?? null) : null,
     lots: [...lots].map(([id, name]) => ({ id, name })),
   };
 }

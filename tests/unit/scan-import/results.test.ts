@@ -39,16 +39,13 @@ it("says of what was in already when it came, and by whom, and offers no undo of
 });
 
 it("says of a table how many wafers it tells of, and of which lot", () => {
-  const [table] = addedResults(
-    [],
-    { file: "t.csv", key: "2" },
-    {
-      outcome: "measured",
-      reading: "r1",
-      kind: "summary",
-      wafers: 8,
-      lots: [{ id: "l1", name: "L1" }],
-    },
-  );
-  expect(table).toMatchObject({ words: "is in, a summary of eight wafers, lot L1", path: "/lots/l1" });
+  const measured = { outcome: "measured" as const, reading: "r1", lots: [{ id: "l1", name: "L1" }] };
+  const added = (what: { kind: string; wafers: number; only: string | null }) =>
+    addedResults([], { file: "t.csv", key: "2" }, { ...measured, ...what });
+  expect(added({ kind: "summary", wafers: 8, only: null })).toMatchObject([
+    { words: "is in, a summary of eight wafers, lot L1", path: "/lots/l1" },
+  ]);
+  expect(added({ kind: "thickness map", wafers: 1, only: "w1" })).toMatchObject([
+    { words: "is in, a thickness map of one wafer, lot L1", path: "/wafers/w1" },
+  ]);
 });

@@ -21,7 +21,7 @@ describe("what not to do", () => {
   it("on tape is to lift, release, heat, put into vacuum or trim it", () => {
     expect(lines(demoResult("Tern"))[1]).toEqual([
       "Do not lift bare",
-      "Do not release: it rolls to about 0.3 m",
+      "Do not release: rolls to about 0.3 m",
       "Do not heat above 80 °C on tape",
       "Do not put into vacuum on tape",
       "Do not trim after grinding",
@@ -36,7 +36,7 @@ describe("what not to do", () => {
   it("on a carrier follows from the bonding material", () => {
     expect(lines(demoResult("Petrel"))[1]).toEqual([
       "Do not lift bare",
-      "Do not release: it rolls to about 0.2 m",
+      "Do not release: rolls to about 0.2 m",
       "Do not heat above 280 °C: the bond",
       "Do not trim after grinding",
     ]);
