@@ -73,7 +73,10 @@ test("what was opened and marked stands in the palette and on Today", async ({ p
   await signIn(page, "process owner");
   await page.goto("/stacks?q=fulmar");
   await scriptsAtWork(opener(page));
-  await page.getByRole("table").getByRole("link", { name: /^Fulmar/ }).click();
+  await page
+    .getByRole("table")
+    .getByRole("link", { name: /^Fulmar/ })
+    .click();
   const star = page.getByRole("button", { name: "Favourite" });
   await expect(star).toHaveAttribute("aria-pressed", "false");
   await star.click();

@@ -1,4 +1,4 @@
-import { data } from "react-router";
+import { redirect } from "react-router";
 import { PreferencesPage } from "#app/components/preferences/PreferencesPage.tsx";
 import { preferencesFormSchema } from "#app/schemas/preference.ts";
 import { scopeOf } from "#app/server/contexts.server.ts";
@@ -9,8 +9,8 @@ import type { Route } from "./+types/preferences";
 
 export const meta: Route.MetaFunction = () => [{ title: "Preferences · Planeward" }];
 
-export async function loader({ context }: Route.LoaderArgs) {
-  return { preferences: await preferencesFor(scopeOf(context)) };
+export async function loader({ context, url }: Route.LoaderArgs) {
+  return { preferences: await preferencesFor(scopeOf(context)), saved: url.searchParams.has("saved") };
 }
 
 export async function action({ request, context }: Route.ActionArgs) {
@@ -19,9 +19,10 @@ export async function action({ request, context }: Route.ActionArgs) {
     throw problem(400, "These preferences could not be read. Open the page again and choose from it.");
   const { theme, density, singleKeys } = submission.value;
   await savePreferences(scopeOf(context), { theme, density, singleKeys: singleKeys === "on" });
-  return data({ saved: true });
+  // The page that says so is drawn by them already.
+  throw redirect("/preferences?saved");
 }
 
-export default function PreferencesRoute({ loaderData, actionData }: Route.ComponentProps) {
-  return <PreferencesPage preferences={loaderData.preferences} saved={actionData?.saved ?? false} />;
+export default function PreferencesRoute({ loaderData }: Route.ComponentProps) {
+  return <PreferencesPage {...loaderData} />;
 }
