@@ -9,6 +9,7 @@ import {
 } from "react-router";
 import stylesheet from "./app.css?url";
 import { ErrorPage } from "./components/layout/ErrorPage.tsx";
+import { DEFAULT_PREFERENCES, type Preferences } from "./lib/preferences.ts";
 import { originCheck } from "./middleware/origin-check.server.ts";
 import { requestLog } from "./middleware/request-log.server.ts";
 import { securityHeaders } from "./middleware/security-headers.server.ts";
@@ -30,14 +31,26 @@ export function loader({ context }: Route.LoaderArgs) {
 /** The nonce belongs to the page that was served: a later navigation must not replace it. */
 export const shouldRevalidate = () => false;
 
+interface Framed {
+  mine: { preferences: Preferences };
+}
+
+/** The preferences of whoever is signed in; at the door, those that are delivered. */
+function usePreferences(): Preferences {
+  const framed = useRouteLoaderData<Framed>("routes/_app/layout");
+  const printed = useRouteLoaderData<Framed>("routes/_print/layout");
+  return (framed ?? printed)?.mine.preferences ?? DEFAULT_PREFERENCES;
+}
+
 export function Layout({ children }: { children: React.ReactNode }) {
   const nonce = useRouteLoaderData<typeof loader>("root")?.nonce;
+  const { theme, density } = usePreferences();
   return (
-    <html lang="en">
+    <html lang="en" data-theme={theme === "system" ? undefined : theme} data-density={density}>
       <head>
         <meta charSet="utf-8" />
         <meta name="viewport" content="width=device-width, initial-scale=1" />
-        <meta name="color-scheme" content="light dark" />
+        <meta name="color-scheme" content={theme === "system" ? "light dark" : theme} />
         <Meta />
         <Links nonce={nonce} />
       </head>

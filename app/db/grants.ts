@@ -36,6 +36,10 @@ const READ_AND_WRITE = [
   "wafer_scan",
   "wafer_measurement",
   "job",
+  "recent_visit",
+  "favourite",
+  "saved_filter",
+  "preference",
 ];
 
 /** SQL that gives the role its rights and nothing more. */

@@ -11,8 +11,9 @@ export interface ListParams {
 
 export const PAGE_SIZE = 25;
 
-/** Text of an address for the database, which knows no NUL. */
-const plain = (text: string | null) => (text ?? "").replaceAll("\0", "").trim().slice(0, 100);
+/** Text of a search for the database, which knows no NUL; a Greek mu is the sign that units are written with. */
+export const searchText = (text: string | null): string =>
+  (text ?? "").replaceAll("\0", "").replaceAll("\u03bc", "\u00b5").trim().slice(0, 100);
 
 /** Reads a list's parameters; anything not understood falls back to the first of `sorts`, ascending, first page. */
 export function readListParams(
@@ -28,11 +29,11 @@ export function readListParams(
   const known = sorts.includes(name);
   const page = Number.parseInt(search.get("page") ?? "", 10);
   return {
-    query: plain(search.get("q")),
+    query: searchText(search.get("q")),
     sort: known ? name : (sorts[0] ?? ""),
     descending: known ? asked.startsWith("-") : descending,
     page: Number.isInteger(page) && page > 0 ? Math.min(page, 100_000) : 1,
-    filters: Object.fromEntries(filters.map((key) => [key, plain(search.get(key))])),
+    filters: Object.fromEntries(filters.map((key) => [key, searchText(search.get(key))])),
   };
 }
 

@@ -18,6 +18,46 @@ const ALL: (Place & { open: (actor: Actor) => boolean })[] = [
   { name: "Method", path: "/method", open: () => true },
 ];
 
+/** What lies within a place and is worth finding by its name; `also` has other words for it. */
+interface Page extends Place {
+  also?: string;
+}
+
+const seesWork = (actor: Actor) => programsWhere(actor, "see the work").length > 0;
+const seesLibrary = (actor: Actor) => mayOnSite(actor, "see the library");
+
+const WITHIN: (Page & { open: (actor: Actor) => boolean })[] = [
+  { name: "Favourites", path: "/favourites", also: "marked, starred", open: seesLibrary },
+  { name: "Preferences", path: "/preferences", also: "theme, dark, density, settings", open: () => true },
+  { name: "Carriers", path: "/carriers/carriers", open: seesLibrary },
+  { name: "Bonding materials", path: "/carriers/bonding-materials", also: "adhesives", open: seesLibrary },
+  { name: "Tapes", path: "/carriers/tapes", open: seesLibrary },
+  { name: "Silicon", path: "/carriers/silicon", open: seesLibrary },
+  { name: "Tools", path: "/carriers/tools", also: "equipment", open: seesLibrary },
+  { name: "Limits", path: "/carriers/limits", also: "thresholds of the handling rules", open: seesLibrary },
+  { name: "Flow templates", path: "/flows/library/flows", open: seesLibrary },
+  { name: "Step library", path: "/flows/library/steps", open: seesLibrary },
+  { name: "What would change?", path: "/assessments/change-request", also: "change request", open: seesWork },
+  { name: "Lots", path: "/lots", also: "wafers", open: seesWork },
+  { name: "Import scans", path: "/scans/import", also: "upload files", open: mayUpload },
+  { name: "Upload one pair of scans", path: "/scans/new", open: mayUpload },
+  { name: "Files that wait", path: "/scans/waiting", also: "scans without a partner", open: seesWork },
+  { name: "Instruments", path: "/instruments", also: "profilometers", open: seesLibrary },
+  { name: "Import profiles", path: "/import-profiles", open: (actor) => mayOnSite(actor, "keep import profiles") },
+  { name: "Predicted against measured", path: "/predictions", open: seesWork },
+  { name: "Work under way", path: "/jobs", also: "jobs", open: seesWork },
+];
+
+function mayUpload(actor: Actor): boolean {
+  return programsWhere(actor, "upload scans").length > 0;
+}
+
+/** Every page that the actor may open without saying of what: the places, and what lies within them. */
+export function pagesFor(actor: Actor): Page[] {
+  const within = WITHIN.filter(({ open }) => open(actor));
+  return [...placesFor(actor), ...within.map(({ name, path, also }) => ({ name, path, also }))];
+}
+
 /** The places that the actor may open. */
 export function placesFor(actor: Actor): Place[] {
   return ALL.filter(({ open }) => open(actor)).map(({ name, path }) => ({ name, path }));

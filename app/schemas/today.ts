@@ -1,5 +1,6 @@
 import type { FaceUp, Holding, Outcome } from "#app/engine/vocabulary.ts";
 import type { ShapeResult } from "./assessment-result.ts";
+import type { FoundGroup } from "./search.ts";
 import type { ScanRow } from "./scan-view.ts";
 
 /** A flow with its newest assessment, as Today groups them. Times are ISO. */
@@ -52,4 +53,6 @@ export interface TodayView {
   notAssessed: TodayGroup<TodayFlow>;
   scans: ScanRow[];
   programs: TodayProgram[];
+  /** what the person marked and opened last */
+  kept: FoundGroup[];
 }

@@ -11,7 +11,7 @@ import type { ScanDetail, ScanRow } from "#app/schemas/scan-view.ts";
 import { notFound, problem } from "#app/server/problem.server.ts";
 import { inScope, type ActorScope } from "#app/server/scope.server.ts";
 import { analyseScans, FOR_ANALYSIS } from "./film-analysis/analyse-scans.server.ts";
-import { escapeLike } from "./like.server.ts";
+import { everyWord } from "./like.server.ts";
 import { requireInProgram } from "./permission.server.ts";
 import { programFilter } from "./program-filter.server.ts";
 import { idFrom } from "./uuid.server.ts";
@@ -51,14 +51,15 @@ function orderOf({ sort, descending }: ListParams) {
 /** A page of the scans that the person may see. Searched by wafer, film and person. */
 export async function listScans(scope: ActorScope, params: ListParams): Promise<ListPage<ScanRow>> {
   scanPrograms(scope, "see the work");
-  const pattern = { $ilike: `%${escapeLike(params.query)}%` };
   return inScope(scope, async (em) => {
     const [scans, total] = await em.findAndCount(
       Scan,
       {
         program: programFilter(scope.actor, "see the work", params.filters["program"]),
         ...(params.query
-          ? { $or: [{ label: pattern }, { film: { name: pattern } }, { createdBy: { name: pattern } }] }
+          ? everyWord(params.query, (pattern) => ({
+              $or: [{ label: pattern }, { film: { name: pattern } }, { createdBy: { name: pattern } }],
+            }))
           : {}),
       },
       {

@@ -18,7 +18,8 @@ import type { StackValues } from "#app/schemas/stack.ts";
 import { notFound, problem } from "#app/server/problem.server.ts";
 import { inScope, type ActorScope } from "#app/server/scope.server.ts";
 import { answerOrNull } from "./estimate-answer.ts";
-import { escapeLike } from "./like.server.ts";
+import { favouriteIds } from "./kept/favourites.server.ts";
+import { everyWord } from "./like.server.ts";
 import { readLimits } from "./limits.server.ts";
 import { requireInProgram } from "./permission.server.ts";
 import { programFilter } from "./program-filter.server.ts";
@@ -149,7 +150,8 @@ export async function listStacks(
       Stack,
       {
         program: programFilter(scope.actor, "see the work", params.filters["program"]),
-        ...(params.query ? { name: { $ilike: `%${escapeLike(params.query)}%` } } : {}),
+        ...(params.filters["favourites"] ? { id: { $in: await favouriteIds(em, scope, "stack") } } : {}),
+        ...(params.query ? everyWord(params.query, (name) => ({ name })) : {}),
       },
       {
         populate: ["program", "silicon", "updatedBy"],

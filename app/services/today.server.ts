@@ -7,6 +7,7 @@ import type { AssessmentResult, StepResult } from "#app/schemas/assessment-resul
 import type { TodayAssessed, TodayFlow, TodayGroup, TodayProgram, TodayView } from "#app/schemas/today.ts";
 import { inScope, type ActorScope } from "#app/server/scope.server.ts";
 import { outOfDateAmong } from "./assessments/out-of-date.server.ts";
+import { keptGroups } from "./kept/kept-rows.server.ts";
 import { latestScans } from "./scans.server.ts";
 
 const LATEST_SCANS = 4;
@@ -28,6 +29,7 @@ export async function todayView(scope: ActorScope): Promise<TodayView> {
       works: works.length > 0,
       mayAssess: programsWhere(actor, "run assessments").length > 0,
       mayUpload: programsWhere(actor, "upload scans").length > 0,
+      kept: await keptGroups(em, scope),
     };
     if (works.length === 0)
       return {

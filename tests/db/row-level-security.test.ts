@@ -42,6 +42,9 @@ const SITE_TABLES = [
   "film_stress_in_use",
 ];
 
+/** What a person keeps for themselves. */
+const OWN_TABLES = ["recent_visit", "favourite", "saved_filter", "preference"];
+
 let engineer: ActorScope;
 let technician: ActorScope;
 let guest: ActorScope;
@@ -81,6 +84,7 @@ describe("every table", () => {
   test.each([
     ...PROGRAM_TABLES,
     ...SITE_TABLES,
+    ...OWN_TABLES,
     "person",
     "credential",
     "session",
@@ -129,6 +133,42 @@ describe("a query that forgets its program", () => {
     );
     expect(await forgetful(engineer, "select person_id from credential")).toEqual([{ person_id: engineer.actor.id }]);
   });
+});
+
+describe("what a person keeps for themselves", () => {
+  const COLUMNS: Record<string, [names: string, values: string]> = {
+    recent_visit: ["kind, record_id, at", "'film', gen_random_uuid(), now()"],
+    favourite: ["kind, record_id, at", "'film', gen_random_uuid(), now()"],
+    saved_filter: ["list, name, query, at", "'/films', 'metals', 'kind=metal', now()"],
+    preference: ["value, at", "'{}', now()"],
+  };
+  const insert = (table: string, person: string) => {
+    const [names, values] = COLUMNS[table] ?? ["", ""];
+    return `insert into "${table}" (id, person_id, ${names}) values (gen_random_uuid(), '${person}', ${values})`;
+  };
+
+  test.each(OWN_TABLES)(
+    "in %s is seen, changed and removed by nobody else, an administrator included",
+    async (table) => {
+      await forgetful(guest, insert(table, guest.actor.id));
+      expect(await forgetful(guest, `select * from "${table}"`)).toHaveLength(1);
+      const administrator = await scopeOfPerson(database, "administrator");
+      for (const other of [engineer, administrator]) {
+        expect(await forgetful(other, `select * from "${table}"`)).toEqual([]);
+        await forgetful(other, `update "${table}" set at = at - interval '1 day'`);
+        await forgetful(other, `delete from "${table}"`);
+        await expect(forgetful(other, insert(table, guest.actor.id))).rejects.toThrow(/row-level security/);
+      }
+      const kept = await forgetful<{ fresh: boolean }>(
+        guest,
+        `select at > now() - interval '1 hour' as fresh from "${table}"`,
+      );
+      expect(kept).toEqual([{ fresh: true }]);
+      await expect(forgetful(guest, `update "${table}" set person_id = '${engineer.actor.id}'`)).rejects.toThrow(
+        /row-level security/,
+      );
+    },
+  );
 });
 
 describe("a write", () => {

@@ -1,4 +1,6 @@
 import { Link } from "react-router";
+import { StarButton } from "#app/components/kept/StarButton.tsx";
+import { MethodLink } from "#app/components/layout/MethodLink.tsx";
 import { Notice } from "#app/components/ui/Notice.tsx";
 import { revisionLetters } from "#app/lib/assessment-revision.ts";
 import type { AssessmentHead } from "#app/lib/assessment-view.ts";
@@ -43,6 +45,8 @@ export function AssessmentTop({ head, leg, refused }: Props) {
             <span aria-current="page">Assessment {revisionLetters(head.number)}</span>
           )}
         </nav>
+        <StarButton kind="assessment" id={head.id} />
+        <MethodLink />
         <div className="ml-auto flex flex-wrap gap-2 max-tablet:hidden">
           <AssessmentActions head={head} leg={leg} />
         </div>

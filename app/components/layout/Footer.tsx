@@ -8,6 +8,10 @@ export function Footer() {
       <Link to="/method#cautions" className="link">
         Cautions
       </Link>
+      {" · "}
+      <Link to="/method#keys" className="link">
+        Keys
+      </Link>
     </footer>
   );
 }

@@ -1,5 +1,8 @@
 import type { ReactNode } from "react";
-import { Link } from "react-router";
+import { Link, useLocation } from "react-router";
+import { StarButton } from "#app/components/kept/StarButton.tsx";
+import { keptRecordAt } from "#app/lib/kept-kinds.ts";
+import { MethodLink } from "./MethodLink.tsx";
 
 interface Props {
   title: string;
@@ -9,8 +12,10 @@ interface Props {
   actions?: ReactNode;
 }
 
-/** Title of a page, the way back, and what can be done here. */
+/** Title of a page with its star where it is that of a record, the way back, where its method is told, and what can be done here. */
 export function PageHead({ title, remark, crumbs, actions }: Props) {
+  const { pathname } = useLocation();
+  const record = keptRecordAt(pathname);
   return (
     <div className="screen-only flex flex-wrap items-center gap-x-4 gap-y-2 py-4">
       <div>
@@ -26,9 +31,15 @@ export function PageHead({ title, remark, crumbs, actions }: Props) {
             ))}
           </nav>
         )}
-        <h1 className={crumbs ? "text-figure font-medium" : "text-answer font-medium"}>{title}</h1>
+        <div className="flex items-center gap-1">
+          <h1 className={crumbs ? "text-figure font-medium" : "text-answer font-medium"}>{title}</h1>
+          {record && <StarButton {...record} />}
+        </div>
       </div>
-      {remark && <p className="self-end pb-1 text-quiet">{remark}</p>}
+      <p className="self-end pb-1 text-quiet">
+        {remark && <span className="mr-3">{remark}</span>}
+        <MethodLink />
+      </p>
       {actions && <div className="ml-auto flex flex-wrap gap-2">{actions}</div>}
     </div>
   );

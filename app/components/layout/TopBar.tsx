@@ -1,17 +1,23 @@
 import { useEffect, useRef } from "react";
 import { Form, Link, useLocation } from "react-router";
 import { Mark } from "#app/components/drawings/Mark.tsx";
+import { KeysOpener } from "#app/components/keyboard/KeysOpener.tsx";
+import { useMine } from "#app/components/kept/use-mine.ts";
+import { SearchOpener } from "#app/components/search/SearchOpener.tsx";
 import { liesIn } from "#app/lib/current-place.ts";
 import type { Place } from "#app/policies/places.ts";
 
 interface Props {
   person: { name: string; role: string };
   places: Place[];
+  /** names of the programs that the person belongs to */
+  programs: string[];
 }
 
-/** Mark, who am I, and the places in the order of the job. */
-export function TopBar({ person, places }: Props) {
+/** Mark, program, search, who am I, and the places in the order of the job. */
+export function TopBar({ person, places, programs }: Props) {
   const { pathname } = useLocation();
+  const mine = useMine();
   const row = useRef<HTMLElement>(null);
   useEffect(() => {
     if (row.current) showCurrent(row.current);
@@ -30,10 +36,19 @@ export function TopBar({ person, places }: Props) {
           <Mark />
           <span>Planeward</span>
         </Link>
-        <p className="relative ml-auto min-w-0 truncate text-quiet">
+        {programs.length > 0 && (
+          <Link to="/#programs" className="truncate text-quiet no-underline hover:underline max-wide:hidden">
+            {programs.length === 1 ? programs[0] : `${programs.length} programs`}
+          </Link>
+        )}
+        <div className="ml-auto">
+          <SearchOpener />
+        </div>
+        <Link to="/preferences" className="relative min-w-0 truncate py-1 text-quiet no-underline hover:underline">
           {person.name}
           <span className="max-tablet:sr-only">, {person.role}</span>
-        </p>
+          <span className="sr-only">: preferences</span>
+        </Link>
         <Form method="post" action="/sign-out">
           <button type="submit" className="link min-h-8 cursor-pointer whitespace-nowrap">
             Sign out
@@ -55,6 +70,7 @@ export function TopBar({ person, places }: Props) {
           ))}
         </ul>
       </nav>
+      {mine && <KeysOpener singleKeys={mine.preferences.singleKeys} />}
     </header>
   );
 }

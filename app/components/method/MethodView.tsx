@@ -1,4 +1,5 @@
 import { Cautions } from "#app/components/cautions/Cautions.tsx";
+import { ShortcutList } from "#app/components/keyboard/ShortcutList.tsx";
 import { noBreak } from "#app/components/drawings/no-break.ts";
 import type { Equation } from "#app/engine/equations.ts";
 import { CHUCK } from "#app/engine/equations/chuck.ts";
@@ -12,11 +13,12 @@ import { PLATE } from "#app/engine/equations/plate.ts";
 import { SILICON } from "#app/engine/equations/silicon.ts";
 import { STRENGTH } from "#app/engine/equations/strength.ts";
 import { THIN_FILM } from "#app/engine/equations/thin-film.ts";
+import { METHOD_SECTIONS } from "#app/lib/method-sections.ts";
+import { CONVENTIONS, GLOSSARY, leftOut } from "#app/lib/method-words.ts";
 import type { RuleText } from "#app/schemas/rule-text.ts";
 import { Bibliography } from "./Bibliography.tsx";
 import { EquationEntry } from "./EquationEntry.tsx";
 import { MethodSection } from "./MethodSection.tsx";
-import { CONVENTIONS, GLOSSARY, leftOut } from "./method-words.ts";
 import { RuleEntry } from "./RuleEntry.tsx";
 import { TermList } from "./TermList.tsx";
 
@@ -33,17 +35,6 @@ const GROUPS: readonly { id: string; title: string; equations: Record<string, Eq
   { id: "metrology", title: "Scans and uncertainty", equations: METROLOGY },
   { id: "handling", title: "Handling", equations: HANDLING },
 ];
-
-export const METHOD_SECTIONS = [
-  { id: "model", title: "What is computed" },
-  { id: "conventions", title: "Signs and words" },
-  { id: "rules", title: "Handling rules" },
-  { id: "equations", title: "Equations" },
-  { id: "left-out", title: "What is left out" },
-  { id: "cautions", title: "Cautions" },
-  { id: "glossary", title: "Glossary" },
-  { id: "sources", title: "Sources" },
-] as const;
 
 interface Props {
   rules: RuleText[];
@@ -109,6 +100,12 @@ export function MethodView({ rules, engineVersion }: Props) {
       </MethodSection>
       <MethodSection id="glossary" title="Glossary">
         <TermList terms={GLOSSARY} />
+      </MethodSection>
+      <MethodSection id="keys" title="Keys">
+        <ShortcutList />
+        <p className="mt-2 text-quiet">
+          The key ? can be switched off in the preferences, which open by your name above.
+        </p>
       </MethodSection>
       <MethodSection id="sources" title="Sources">
         <Bibliography />

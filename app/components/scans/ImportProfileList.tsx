@@ -21,7 +21,7 @@ export function ImportProfileList({
   return (
     <ul className="border-t border-ink">
       {profiles.map((profile) => (
-        <li key={profile.id} className="border-b border-line py-3">
+        <li key={profile.id} id={`profile-${profile.id}`} className="scroll-mt-4 border-b border-line py-3">
           <ProfileItem profile={profile} fault={answer?.id === profile.id ? answer.sentence : null} />
         </li>
       ))}

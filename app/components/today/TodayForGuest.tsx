@@ -1,3 +1,4 @@
+import { KeptSections } from "#app/components/kept/KeptSections.tsx";
 import { EmptyState } from "#app/components/ui/EmptyState.tsx";
 import type { TodayView } from "#app/schemas/today.ts";
 import { TodayHead } from "./TodayHead.tsx";
@@ -21,7 +22,10 @@ export function TodayForGuest({ view }: { view: TodayView }) {
           A sheet says at which steps a wafer of your program needs support, and what must not happen to it. It shows
           here and under Sheets as soon as the process owner has released it to you.
         </EmptyState>
-        <TodayPrograms programs={programs} works={false} />
+        <div className="space-y-6">
+          <KeptSections groups={view.kept} />
+          <TodayPrograms programs={programs} works={false} />
+        </div>
       </div>
     </>
   );

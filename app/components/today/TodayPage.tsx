@@ -1,4 +1,5 @@
 import { chooseExaggeration } from "#app/components/drawings/choose-exaggeration.ts";
+import { KeptSections } from "#app/components/kept/KeptSections.tsx";
 import { headline } from "#app/lib/today-groups.ts";
 import { lyingAs } from "#app/lib/lying-as.ts";
 import type { ScanRow } from "#app/schemas/scan-view.ts";
@@ -26,7 +27,7 @@ export function TodayPage({ view }: { view: TodayView }) {
           {!mayAssess && scans}
           {flows === 0 && (
             <div className="mb-6">
-              <FirstSteps stacks={stacks} mayAssess={mayAssess} />
+              <FirstSteps stacks={stacks} scans={view.scans.length} mayAssess={mayAssess} mayUpload={view.mayUpload} />
             </div>
           )}
           {decisions.total > 0 && (
@@ -72,7 +73,10 @@ export function TodayPage({ view }: { view: TodayView }) {
             <p className="text-label text-quiet">Bow lines on this page ×{exaggeration}; rolled wafers ×1.</p>
           )}
         </div>
-        <TodayPrograms programs={programs} works />
+        <div className="space-y-6">
+          <KeptSections groups={view.kept} />
+          <TodayPrograms programs={programs} works />
+        </div>
       </div>
     </>
   );

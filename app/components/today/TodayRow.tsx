@@ -15,7 +15,7 @@ interface Props {
 export function TodayRow({ drawing, title, children, state, action }: Props) {
   const below = drawing ? "max-tablet:col-start-2" : "max-tablet:col-span-2";
   return (
-    <li className="grid grid-cols-[84px_minmax(0,1fr)] items-start gap-x-4 gap-y-1 border-t border-line py-3 first:border-0 first:pt-0 tablet:min-h-16 tablet:grid-cols-[84px_minmax(0,1fr)_148px_104px]">
+    <li className="grid grid-cols-[84px_minmax(0,1fr)] items-start gap-x-4 gap-y-1 border-t border-line py-(--row-space) first:border-0 first:pt-0 tablet:min-h-(--row-least) tablet:grid-cols-[84px_minmax(0,1fr)_148px_104px]">
       <div className={drawing ? "" : "max-tablet:hidden"}>{drawing}</div>
       <div className={`min-w-0 ${drawing ? "" : "max-tablet:col-span-2"}`}>
         <h3 className="font-semibold wrap-anywhere">{title}</h3>

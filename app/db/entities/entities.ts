@@ -5,6 +5,7 @@ import { Carrier } from "./carrier.ts";
 import { CarrierUnit } from "./carrier-unit.ts";
 import { Credential } from "./credential.ts";
 import { Equipment } from "./equipment.ts";
+import { Favourite } from "./favourite.ts";
 import { Film } from "./film.ts";
 import { FilmStressInUse } from "./film-stress-in-use.ts";
 import { FilmStressValue } from "./film-stress-value.ts";
@@ -18,10 +19,13 @@ import { Job } from "./job.ts";
 import { Lot } from "./lot.ts";
 import { Membership } from "./membership.ts";
 import { Person } from "./person.ts";
+import { Preference } from "./preference.ts";
 import { Program } from "./program.ts";
+import { RecentVisit } from "./recent-visit.ts";
 import { ReferenceReading } from "./reference-reading.ts";
 import { ReferenceWafer } from "./reference-wafer.ts";
 import { RepeatabilityStudy } from "./repeatability-study.ts";
+import { SavedFilter } from "./saved-filter.ts";
 import { Scan } from "./scan.ts";
 import { ScanFile } from "./scan-file.ts";
 import { ScanReading } from "./scan-reading.ts";
@@ -76,5 +80,9 @@ export const entities = [
   WaferMeasurement,
   Scan,
   Job,
+  RecentVisit,
+  Favourite,
+  SavedFilter,
+  Preference,
   AuditEvent,
 ];

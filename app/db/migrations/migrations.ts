@@ -17,6 +17,7 @@ import { Tapes } from "./2026-12-06-tapes.ts";
 import { StepMeasurements } from "./2026-12-07-step-measurements.ts";
 import { Wafers } from "./2026-12-07-wafers.ts";
 import { Instruments } from "./2026-12-07-instruments.ts";
+import { FoundQuickly } from "./2026-12-08-found-quickly.ts";
 
 /** Every migration in the order in which it runs. */
 export const migrations = [
@@ -39,4 +40,5 @@ export const migrations = [
   { name: "2026-12-07-wafers", class: Wafers },
   { name: "2026-12-07-instruments", class: Instruments },
   { name: "2026-12-07-step-measurements", class: StepMeasurements },
+  { name: "2026-12-08-found-quickly", class: FoundQuickly },
 ];

@@ -1,9 +1,10 @@
-import { data, redirect } from "react-router";
+import { data, Link, redirect } from "react-router";
 import { ImportProfileList, type ProfileAnswer } from "#app/components/scans/ImportProfileList.tsx";
 import { PageHead } from "#app/components/layout/PageHead.tsx";
 import { EmptyState } from "#app/components/ui/EmptyState.tsx";
 import { ListHead } from "#app/components/ui/ListHead.tsx";
 import { readListParams } from "#app/lib/list-params.ts";
+import { matchRank } from "#app/lib/match-rank.ts";
 import { importProfileRecordSchema } from "#app/schemas/import-profile.ts";
 import { scopeOf } from "#app/server/contexts.server.ts";
 import { postedForm, saveProblem, versionOf } from "#app/server/form.server.ts";
@@ -22,8 +23,7 @@ export const meta: Route.MetaFunction = () => [{ title: "Import profiles · Plan
 export async function loader({ context, url }: Route.LoaderArgs) {
   const { query } = readListParams(url.searchParams, { sorts: ["name"] });
   const profiles = await listImportProfiles(scopeOf(context));
-  const wanted = query.toLowerCase();
-  return { query, profiles: profiles.filter(({ name }) => name.toLowerCase().includes(wanted)) };
+  return { query, profiles: profiles.filter(({ name }) => matchRank(query, name) !== null) };
 }
 
 export async function action({ request, context }: Route.ActionArgs) {
@@ -73,7 +73,16 @@ export default function ImportProfiles({ loaderData, actionData }: Route.Compone
       {profiles.length > 0 ? (
         <ImportProfileList profiles={profiles} answer={actionData ?? null} />
       ) : (
-        <EmptyState title={query === "" ? "No profile is kept yet" : "No instrument fits"}>
+        <EmptyState
+          title={query === "" ? "No profile is kept yet" : "No instrument fits"}
+          actions={
+            query === "" && (
+              <Link to="/scans/import" className="btn">
+                Import scans
+              </Link>
+            )
+          }
+        >
           {query === ""
             ? "When you import a file, keep how it was read under the name of its instrument."
             : "Change the search."}

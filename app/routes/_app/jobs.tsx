@@ -1,4 +1,4 @@
-import { redirect } from "react-router";
+import { Link, redirect } from "react-router";
 import { JobList } from "#app/components/jobs/JobList.tsx";
 import { JOB_WORDS } from "#app/components/jobs/job-words.ts";
 import { useLookingAgain } from "#app/components/jobs/use-looking-again.ts";
@@ -24,6 +24,7 @@ export async function loader({ context, url }: Route.LoaderArgs) {
   return {
     jobs,
     programs: programs.map(({ programName, programSlug }) => ({ value: programSlug, label: programName })),
+    mayUpload: programsWhere(scope.actor, "upload scans").length > 0,
     searched: params.query !== "" || Object.values(params.filters).some(Boolean),
   };
 }
@@ -44,7 +45,7 @@ export async function action({ request, context, url }: Route.ActionArgs) {
   throw redirect(`/jobs${url.search}`);
 }
 
-export default function Jobs({ loaderData: { jobs, programs, searched } }: Route.ComponentProps) {
+export default function Jobs({ loaderData: { jobs, programs, searched, mayUpload } }: Route.ComponentProps) {
   const underWay = jobs.filter(({ state }) => state === "waiting" || state === "running").length;
   useLookingAgain(underWay > 0);
   return (
@@ -79,7 +80,17 @@ export default function Jobs({ loaderData: { jobs, programs, searched } }: Route
           </p>
         </>
       ) : (
-        <EmptyState title={searched ? "No work fits" : "Nothing here yet"}>
+        <EmptyState
+          title={searched ? "No work fits" : "Nothing here yet"}
+          actions={
+            mayUpload &&
+            !searched && (
+              <Link to="/scans/import" className="btn">
+                Import scans
+              </Link>
+            )
+          }
+        >
           {searched
             ? "Change the search, or take a filter away."
             : "Files that take longer to read than a page should wait stand here, with how far they are and how they ended."}

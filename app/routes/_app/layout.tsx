@@ -4,24 +4,32 @@ import { Footer } from "#app/components/layout/Footer.tsx";
 import { TopBar } from "#app/components/layout/TopBar.tsx";
 import { roleInWords } from "#app/policies/role-words.ts";
 import { placesFor } from "#app/policies/places.ts";
+import { visits } from "#app/middleware/visits.server.ts";
 import { signedIn } from "#app/middleware/signed-in.server.ts";
 import { scopeOf } from "#app/server/contexts.server.ts";
+import { mineOf } from "#app/services/kept/mine.server.ts";
 import type { Route } from "./+types/layout";
 
-export const middleware: Route.MiddlewareFunction[] = [signedIn];
+export const middleware: Route.MiddlewareFunction[] = [signedIn, visits];
 
 /** Title of what has none of its own: a refusal inside. */
 export const meta: Route.MetaFunction = () => [{ title: "Planeward" }];
 
-export function loader({ context }: Route.LoaderArgs) {
-  const { actor } = scopeOf(context);
-  return { person: { name: actor.name, role: roleInWords(actor) }, places: placesFor(actor) };
+export async function loader({ context }: Route.LoaderArgs) {
+  const scope = scopeOf(context);
+  const { actor } = scope;
+  return {
+    person: { name: actor.name, role: roleInWords(actor) },
+    places: placesFor(actor),
+    programs: actor.memberships.map(({ programName }) => programName),
+    mine: await mineOf(scope),
+  };
 }
 
 export default function AppLayout({ loaderData }: Route.ComponentProps) {
   return (
     <>
-      <TopBar person={loaderData.person} places={loaderData.places} />
+      <TopBar {...loaderData} />
       <main id="main" className="mx-auto max-w-page px-4 pb-6 tablet:px-6" tabIndex={-1}>
         <Outlet />
       </main>
@@ -34,7 +42,7 @@ export default function AppLayout({ loaderData }: Route.ComponentProps) {
 export function ErrorBoundary({ error, loaderData }: Route.ErrorBoundaryProps) {
   return (
     <>
-      {loaderData && <TopBar person={loaderData.person} places={loaderData.places} />}
+      {loaderData && <TopBar {...loaderData} />}
       <main id="main" className="mx-auto max-w-page px-4 py-6 tablet:px-6">
         <ErrorPage status={isRouteErrorResponse(error) ? error.status : 500} error={error} />
       </main>

@@ -6,7 +6,8 @@ import type { FlowDetail, FlowRow } from "#app/schemas/flow-view.ts";
 import type { FlowValues } from "#app/schemas/flow.ts";
 import { problem } from "#app/server/problem.server.ts";
 import { inScope, type ActorScope } from "#app/server/scope.server.ts";
-import { escapeLike } from "../like.server.ts";
+import { favouriteIds } from "../kept/favourites.server.ts";
+import { everyWord } from "../like.server.ts";
 import { requireInProgram, requireInSomeProgram } from "../permission.server.ts";
 import { programFilter } from "../program-filter.server.ts";
 import { idFrom } from "../uuid.server.ts";
@@ -24,7 +25,8 @@ export async function listFlows(scope: ActorScope, params: ListParams): Promise<
       Flow,
       {
         program: programFilter(scope.actor, "see the work", params.filters["program"]),
-        ...(params.query ? { name: { $ilike: `%${escapeLike(params.query)}%` } } : {}),
+        ...(params.filters["favourites"] ? { id: { $in: await favouriteIds(em, scope, "flow") } } : {}),
+        ...(params.query ? everyWord(params.query, (name) => ({ name })) : {}),
       },
       {
         populate: ["program", "silicon"],

@@ -6,7 +6,7 @@ import { PAGE_SIZE, type ListPage, type ListParams } from "#app/lib/list-params.
 import type { InstrumentRow } from "#app/schemas/instrument.ts";
 import { inScope, type ActorScope } from "#app/server/scope.server.ts";
 import { saveImportProfile } from "../import-profiles.server.ts";
-import { escapeLike } from "../like.server.ts";
+import { everyWord } from "../like.server.ts";
 import { requireOnSite } from "../permission.server.ts";
 import type { Saved } from "../record.server.ts";
 
@@ -16,7 +16,7 @@ export async function listInstruments(scope: ActorScope, params: ListParams): Pr
   return inScope(scope, async (em) => {
     const [records, total] = await em.findAndCount(
       ImportProfile,
-      params.query ? { name: { $ilike: `%${escapeLike(params.query)}%` } } : {},
+      params.query ? everyWord(params.query, (name) => ({ name })) : {},
       {
         orderBy: { name: params.descending ? "desc" : "asc" },
         limit: PAGE_SIZE,

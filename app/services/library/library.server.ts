@@ -8,7 +8,7 @@ import { notFound } from "#app/server/problem.server.ts";
 import { inScope, type ActorScope } from "#app/server/scope.server.ts";
 import { requireOnSite } from "../permission.server.ts";
 import { saveNamedRecord, saving, stampOf, type Saved } from "../record.server.ts";
-import { escapeLike } from "../like.server.ts";
+import { everyWord } from "../like.server.ts";
 import { idFrom } from "../uuid.server.ts";
 import { LIBRARY, type LibraryRecord } from "./kinds.server.ts";
 
@@ -46,7 +46,11 @@ export async function listLibrary<Key extends LibraryKey>(
   const sort = (sorts as Record<string, string>)[params.sort] ?? sorts.name;
   return inScope(scope, async (em) => {
     const where: Record<string, unknown> = {};
-    if (params.query) where["name"] = { $ilike: `%${escapeLike(params.query)}%` };
+    if (params.query)
+      Object.assign(
+        where,
+        everyWord(params.query, (name) => ({ name })),
+      );
     for (const [filter, condition] of Object.entries<(value: string) => object | null>(filters))
       if (params.filters[filter]) Object.assign(where, condition(params.filters[filter]));
     const [rows, total] = await em.findAndCount(entityOf(key), where as never, {

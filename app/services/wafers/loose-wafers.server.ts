@@ -2,7 +2,7 @@ import { Wafer } from "#app/db/entities/wafer.ts";
 import type { ListParams } from "#app/lib/list-params.ts";
 import type { LooseWafers } from "#app/schemas/lot-view.ts";
 import { inScope, type ActorScope } from "#app/server/scope.server.ts";
-import { escapeLike } from "../like.server.ts";
+import { everyWord } from "../like.server.ts";
 import { programFilter } from "../program-filter.server.ts";
 import { scanPrograms } from "../scans.server.ts";
 
@@ -18,7 +18,7 @@ export async function looseWafers(scope: ActorScope, { query, filters }: ListPar
       {
         lot: null,
         program: programFilter(scope.actor, "see the work", filters["program"]),
-        ...(query ? { name: { $ilike: `%${escapeLike(query)}%` } } : {}),
+        ...(query ? everyWord(query, (name) => ({ name })) : {}),
       },
       { populate: ["program"], orderBy: [{ createdAt: "desc" }, { id: "asc" }], limit: SHOWN },
     );

@@ -5,7 +5,7 @@ import { mayInProgram } from "#app/policies/permissions.ts";
 import type { LotDetail, LotRow } from "#app/schemas/lot-view.ts";
 import { notFound, problem } from "#app/server/problem.server.ts";
 import { inScope, type ActorScope } from "#app/server/scope.server.ts";
-import { escapeLike } from "../like.server.ts";
+import { wordPatterns } from "../like.server.ts";
 import { requireInProgram } from "../permission.server.ts";
 import { programFilter } from "../program-filter.server.ts";
 import { scanPrograms } from "../scans.server.ts";
@@ -31,21 +31,12 @@ function orderOf({ sort, descending }: ListParams) {
 /** A page of the lots of the person's programs. Searched by lot, by the names of its wafers, and by person. */
 export async function listLots(scope: ActorScope, params: ListParams): Promise<ListPage<LotRow>> {
   scanPrograms(scope, "see the work");
-  const pattern = `%${escapeLike(params.query)}%`;
   return inScope(scope, async (em) => {
     const [lots, total] = await em.findAndCount(
       Lot,
       {
         program: programFilter(scope.actor, "see the work", params.filters["program"]),
-        ...(params.query
-          ? {
-              $or: [
-                { name: { $ilike: pattern } },
-                { createdBy: { name: { $ilike: pattern } } },
-                { id: { $in: await lotsWithWafer(em, pattern) } },
-              ],
-            }
-          : {}),
+        $and: await Promise.all(wordPatterns(params.query).map((pattern) => namedAs(em, pattern))),
       },
       {
         populate: ["program", "createdBy"],
@@ -69,6 +60,12 @@ export async function listLots(scope: ActorScope, params: ListParams): Promise<L
     }));
     return { rows, total, params };
   });
+}
+
+/** The condition that one word of a search is found of a lot. */
+async function namedAs(em: EntityManager, pattern: string) {
+  const name = { $ilike: pattern };
+  return { $or: [{ name }, { createdBy: { name } }, { id: { $in: await lotsWithWafer(em, pattern) } }] };
 }
 
 async function lotsWithWafer(em: EntityManager, pattern: string): Promise<string[]> {

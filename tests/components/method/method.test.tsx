@@ -2,7 +2,7 @@ import { describe, expect, it } from "vitest";
 import { Cautions } from "#app/components/cautions/Cautions.tsx";
 import { CAUTION_SIGNS } from "#app/components/method/CautionSign.tsx";
 import { MethodView } from "#app/components/method/MethodView.tsx";
-import { leftOut } from "#app/components/method/method-words.ts";
+import { leftOut } from "#app/lib/method-words.ts";
 import { EQUATIONS } from "#app/engine/equations.ts";
 import { SOURCES } from "#app/engine/sources.ts";
 import type { RuleText } from "#app/schemas/rule-text.ts";

@@ -18,6 +18,7 @@ const EMPTY: TodayView = {
   notAssessed: none,
   scans: [],
   programs: [PROGRAM],
+  kept: [],
 };
 const ASSESSED: TodayAssessed = {
   id: "flow",
@@ -72,6 +73,26 @@ describe("Today", () => {
     const markup = shown({ ...EMPTY, programs });
     for (const to of ["/films", "/stacks/new", "/flows/new"]) expect(markup).toContain(`href="${to}"`);
     expect(text({ ...EMPTY, programs, mayAssess: false })).toMatch(/An engineer of your program starts/);
+  });
+
+  it("leads whoever may upload to the first scan, and leaves out what they may not do", () => {
+    const programs = [{ ...PROGRAM, flows: 0, stacks: 0 }];
+    expect(shown({ ...EMPTY, programs })).toContain('href="/scans/new"');
+    const technician = shown({ ...EMPTY, programs, mayAssess: false });
+    expect(technician).toContain('href="/scans/new"');
+    for (const to of ["/stacks/new", "/flows/new"]) expect(technician).not.toContain(`href="${to}"`);
+    expect(text({ ...EMPTY, programs: [{ ...PROGRAM, flows: 0, stacks: 2 }] })).toMatch(
+      /First stack\. Done\. See the stacks/,
+    );
+  });
+
+  it("shows what was marked and opened, to who sees no work too", () => {
+    const row = { key: "1", name: "Polymer dielectric A", about: "film, polymer", path: "/films/1" };
+    const kept = [{ kind: "favourite", title: "Favourites", rows: [row], total: 12, list: "/favourites" }];
+    for (const works of [true, false])
+      expect(text({ ...EMPTY, works, kept })).toContain(
+        "Favourites Polymer dielectric A film, polymer All 12 in the list",
+      );
   });
 
   it("shows a guest programs and no counts, and says that nothing is released", () => {

@@ -3,6 +3,7 @@ import { FindingTag } from "#app/components/drawings/FindingTag.tsx";
 import { PageHead } from "#app/components/layout/PageHead.tsx";
 import { DataTable, type Column } from "#app/components/ui/DataTable.tsx";
 import { EmptyState } from "#app/components/ui/EmptyState.tsx";
+import { FAVOURITES_ONLY } from "#app/components/kept/favourites-only.ts";
 import { ListHead } from "#app/components/ui/ListHead.tsx";
 import { formatBare } from "#app/lib/format-measured.ts";
 import { revisionLetters } from "#app/lib/assessment-revision.ts";
@@ -17,7 +18,11 @@ export const meta: Route.MetaFunction = () => [{ title: "Flows · Planeward" }];
 
 export async function loader({ context, url }: Route.LoaderArgs) {
   const scope = scopeOf(context);
-  const params = readListParams(url.searchParams, { sorts: FLOW_SORTS, filters: ["program"], descending: true });
+  const params = readListParams(url.searchParams, {
+    sorts: FLOW_SORTS,
+    filters: ["program", "favourites"],
+    descending: true,
+  });
   return {
     page: withinPages(url, await listFlows(scope, params)),
     programs: programsWhere(scope.actor, "see the work").map(({ programName, programSlug }) => ({
@@ -99,7 +104,10 @@ export default function Flows({ loaderData }: Route.ComponentProps) {
       />
       <ListHead
         what="flows"
-        filters={programs.length > 1 ? [{ name: "program", label: "Program", options: programs }] : []}
+        filters={[
+          ...(programs.length > 1 ? [{ name: "program", label: "Program", options: programs }] : []),
+          FAVOURITES_ONLY,
+        ]}
       />
       {page.rows.length > 0 ? (
         <DataTable caption="Flows" columns={columns} page={page} rowKey={({ id }) => id} />

@@ -7,6 +7,7 @@ import { exaggerationOf } from "#app/components/stacks/bow-of.ts";
 import { stackColumns } from "#app/components/stacks/stack-columns.tsx";
 import { DataTable } from "#app/components/ui/DataTable.tsx";
 import { EmptyState } from "#app/components/ui/EmptyState.tsx";
+import { FAVOURITES_ONLY } from "#app/components/kept/favourites-only.ts";
 import { ListHead } from "#app/components/ui/ListHead.tsx";
 import { readListParams } from "#app/lib/list-params.ts";
 import { programsWhere } from "#app/policies/permissions.ts";
@@ -19,7 +20,11 @@ export const meta: Route.MetaFunction = () => [{ title: "Stacks · Planeward" }]
 
 export async function loader({ context, url }: Route.LoaderArgs) {
   const scope = scopeOf(context);
-  const params = readListParams(url.searchParams, { sorts: STACK_SORTS, filters: ["program"], descending: true });
+  const params = readListParams(url.searchParams, {
+    sorts: STACK_SORTS,
+    filters: ["program", "favourites"],
+    descending: true,
+  });
   const { flatWithin, ...page } = withinPages(url, await listStacks(scope, params));
   return {
     page,
@@ -44,10 +49,17 @@ export default function Stacks({ loaderData }: Route.ComponentProps) {
   );
   return (
     <>
-      <PageHead title="Stacks" remark={`${page.total} ${searched ? "found" : "stacks"}`} actions={add} />
+      <PageHead
+        title="Stacks"
+        remark={`${page.total} ${searched ? "found" : page.total === 1 ? "stack" : "stacks"}`}
+        actions={add}
+      />
       <ListHead
         what="stacks"
-        filters={programs.length > 1 ? [{ name: "program", label: "Program", options: programs }] : []}
+        filters={[
+          ...(programs.length > 1 ? [{ name: "program", label: "Program", options: programs }] : []),
+          FAVOURITES_ONLY,
+        ]}
       />
       {page.rows.length > 0 ? (
         <>
