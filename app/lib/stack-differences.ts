@@ -23,8 +23,9 @@ export interface StackNames {
 }
 
 const BLANK = "blank";
+const NOT_CHOSEN = "not chosen";
 const nameIn = (list: readonly { id: string; name: string }[], id: string) =>
-  id === "" ? "not chosen" : (list.find((each) => each.id === id)?.name ?? "no longer in the library");
+  id === "" ? NOT_CHOSEN : (list.find((each) => each.id === id)?.name ?? "no longer in the library");
 
 /** A field of a stack or of a film: how it is called, what it says, and the rule that its quantity is read by. */
 interface Part<Of> {
@@ -71,7 +72,7 @@ const STACK_PARTS: Part<StackText>[] = [
 ];
 
 const FILM_PARTS: Part<LayerText>[] = [
-  { field: "film", label: "Film", of: ({ film }) => film, words: (id, { films }) => nameIn(films, id) },
+  { field: "film", label: "Choice", of: ({ film }) => film, words: (id, { films }) => nameIn(films, id) },
   ...measuredParts<LayerText>("thickness", "Thickness", ({ thickness }) => thickness, RULES.filmThickness),
   ...measuredParts<LayerText>("stress", "Stress for this stack", ({ stress }) => stress, RULES.stress),
   {
@@ -132,10 +133,11 @@ interface Placed {
 function placed(layers: readonly LayerText[], names: StackNames): Placed[] {
   return layers.map((layer, index) => {
     const side = layer.side === "front" ? "device side" : "back side";
-    const name = nameIn(names.films, layer.film);
-    const alike = layers.filter(({ film }) => film === layer.film).length > 1;
-    const called = alike ? `${name}, ${index + 1} of ${layers.length}` : name;
-    return { layer, index, name: called, words: `${side}, ${index + 1} of ${layers.length} from the top` };
+    const place = `${index + 1} of ${layers.length}`;
+    const alone = layers.filter(({ film }) => film === layer.film).length === 1;
+    const film = nameIn(names.films, layer.film);
+    const name = layer.film === "" ? `film ${place}` : alone ? film : `${film}, ${place}`;
+    return { layer, index, name, words: `${side}, ${place} from the top` };
   });
 }
 
@@ -175,7 +177,7 @@ function withMoves(pairs: readonly Pair<Placed>[]): Meeting[] {
 const sideless = ({ layer }: Placed) => JSON.stringify({ ...layer, side: null });
 
 function filmDifferences({ before, after, moved }: Meeting, names: StackNames): StackDifference[] {
-  const name = (film: Placed) => nameIn(names.films, film.layer.film);
+  const name = ({ layer }: Placed) => nameIn(names.films, layer.film);
   const thickness = ({ layer }: Placed) => layer.thickness.value || "without a thickness";
   if (!after)
     return before
@@ -203,7 +205,11 @@ function filmDifferences({ before, after, moved }: Meeting, names: StackNames): 
   const key = `layers[${before.index}].`;
   if (moved)
     return [{ key, label: `Place of ${name(after)}`, before: before.words, after: after.words, field: `${at}film` }];
-  return partDifferences(FILM_PARTS, [before.layer, after.layer], names, { key, at, of: ` of ${before.name}` });
+  return partDifferences(FILM_PARTS, [before.layer, after.layer], names, {
+    key,
+    at,
+    of: ` of ${before.layer.film === "" ? after.name : before.name}`,
+  });
 }
 
 /** What lies between two states, in a few words: 'Thickness of Plated copper A: 7 µm, was 5 µm, and 2 more'. */

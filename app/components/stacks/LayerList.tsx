@@ -152,7 +152,7 @@ function LayerFold({ form, field, place, draft, incomplete, films, selected, edi
         <legend className="sr-only">
           {name}, {index + 1} of {count} from the top
         </legend>
-        <LayerFields field={field} draft={draft} films={films} />
+        <LayerFields field={field} draft={draft} films={films} onTypeFilm={() => edits.typeFilm(index)} />
         <LayerActions
           form={form}
           index={index}

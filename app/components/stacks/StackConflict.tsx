@@ -1,3 +1,4 @@
+import { useEffect, useRef } from "react";
 import { Link } from "react-router";
 import { Notice } from "#app/components/ui/Notice.tsx";
 import { useInBrowser } from "#app/components/ui/use-in-browser.ts";
@@ -20,40 +21,45 @@ interface Props {
 export function StackConflict({ conflict, mine, opened, names, address, onTakeTheirs }: Props) {
   const { by, at, theirs } = conflict;
   const inBrowser = useInBrowser();
+  const top = useRef<HTMLDivElement>(null);
+  // Whoever pressed 'save' may be anywhere on a long page.
+  useEffect(() => top.current?.focus(), [conflict]);
   const rows = conflictRows({ mine, theirs, opened: inBrowser ? opened : null }, names);
   return (
-    <Notice
-      kind="error"
-      title={`${by} saved this stack at ${at.slice(0, 16).replace("T", " ")} UTC, after you had opened it`}
-    >
-      {rows.length === 0 ? (
-        <p>Both of you have made the same of it.</p>
-      ) : (
-        <>
-          <p>{summary(rows, by)}</p>
-          <ConflictTable rows={rows} by={by} />
-        </>
-      )}
-      <p className="mt-2">Nothing is saved yet, and nothing that you typed is lost.</p>
-      <div className="mt-3 flex flex-wrap gap-2">
-        <button type="submit" className="btn">
-          Keep mine
-        </button>
-        {inBrowser ? (
-          <button type="button" className="btn" onClick={onTakeTheirs}>
-            Take theirs
-          </button>
+    <div ref={top} tabIndex={-1}>
+      <Notice
+        kind="error"
+        title={`${by} saved this stack at ${at.slice(0, 16).replace("T", " ")} UTC, after you had opened it`}
+      >
+        {rows.length === 0 ? (
+          <p>Both of you have made the same of it.</p>
         ) : (
-          <Link to={address} className="btn">
-            Take theirs
-          </Link>
+          <>
+            <p>{summary(rows, by)}</p>
+            <ConflictTable rows={rows} by={by} />
+          </>
         )}
-      </div>
-      <p className="mt-2 text-label text-quiet">
-        Keep mine saves the stack as you have it here, over theirs. Take theirs puts theirs into the fields
-        {inBrowser && "; undo brings yours back"}.
-      </p>
-    </Notice>
+        <p className="mt-2">Nothing is saved yet, and nothing that you typed is lost.</p>
+        <div className="mt-3 flex flex-wrap gap-2">
+          <button type="submit" className="btn">
+            Keep mine
+          </button>
+          {inBrowser ? (
+            <button type="button" className="btn" onClick={onTakeTheirs}>
+              Take theirs
+            </button>
+          ) : (
+            <Link to={address} className="btn">
+              Take theirs
+            </Link>
+          )}
+        </div>
+        <p className="mt-2 text-label text-quiet">
+          Keep mine saves the stack as you have it here, over theirs. Take theirs puts theirs into the fields
+          {inBrowser && "; undo brings yours back"}.
+        </p>
+      </Notice>
+    </div>
   );
 }
 

@@ -34,6 +34,7 @@ import { ViewOptions } from "./ViewOptions.tsx";
 // What few visits need comes when it is needed.
 const StackConflict = lazy(() => import("./StackConflict.tsx").then((module) => ({ default: module.StackConflict })));
 const DraftOffer = lazy(() => import("./DraftOffer.tsx").then((module) => ({ default: module.DraftOffer })));
+const FilmDialog = lazy(() => import("./FilmDialog.tsx").then((module) => ({ default: module.FilmDialog })));
 const differences = () => import("#app/lib/stack-differences.ts");
 
 interface Props extends StackAround {
@@ -71,6 +72,7 @@ export function StackEditor(props: Props) {
   const history = useStackHistory(said);
   const kept = useKeptDraft({ person, record: stackId ?? "new", version: basis.version, opened, said, saved });
   const [words, setWords] = useState("");
+  const [filmFor, setFilmFor] = useState<number | null>(null);
   const [at, setAt] = useState(view.at);
   const { temperature, read } = viewTemperature(at);
   const live = useLiveEstimate(panelRequests(draft, temperature), props.panel, limits);
@@ -91,6 +93,7 @@ export function StackEditor(props: Props) {
     expect: selection.expect,
     settle: history.settle,
     announce: setWords,
+    typeFilm: setFilmFor,
   });
 
   const onStep = (direction: Direction, focus: boolean) => {
@@ -125,95 +128,109 @@ export function StackEditor(props: Props) {
   const inBrowser = useInBrowser();
   const [found] = lastResult ? [] : kept.offered;
   return (
-    <Form
-      method="post"
-      {...getFormProps(form)}
-      onInput={({ target }) => isText(target) && history.type()}
-      onBlur={({ target }) => isText(target) && history.settle()}
-    >
-      <UnsavedGuard
-        dirty={said !== opened}
-        stands="What you changed here is not saved yet. This browser keeps it as a draft until you sign out."
-      />
-      <Suspense>
-        {conflict ? (
-          <StackConflict
-            conflict={conflict}
-            mine={typed}
-            opened={conflict.version === basis.version ? null : basis.text}
-            names={choices}
-            address={`/stacks/${stackId ?? ""}`}
-            onTakeTheirs={() => takeTheirs(conflict)}
+    <>
+      {filmFor !== null && (
+        <Suspense>
+          <FilmDialog
+            thickness={typed.layers[filmFor]?.thickness.value ?? ""}
+            onAdded={(film) => {
+              setFilmFor(null);
+              edits.putFilm(filmFor, film);
+            }}
+            onClose={() => setFilmFor(null)}
           />
-        ) : (
-          <FormHead lastResult={lastResult === null || props.conflict ? null : lastResult} />
-        )}
-        {found && (
-          <DraftOffer
-            draft={found}
-            version={basis.version}
-            more={kept.offered.length - 1}
-            onTake={() => takeDraft(found)}
-            onForget={() => kept.settle(found)}
-          />
-        )}
-      </Suspense>
-      {basis.version !== null && <input type="hidden" name="version" value={conflict?.version ?? basis.version} />}
-      {programs === null && <input type="hidden" name="program" value={basis.text.program} />}
-      <StackPanes
-        build={
-          <StackBuild
-            form={form}
-            fields={fields}
-            programs={programs}
-            choices={choices}
-            draft={draft}
-            drawn={drawn}
-            panel={panel}
-            limits={limits}
-            part={selection.part}
-            focusPart={focusPart}
-            edits={edits}
-            bar={
-              inBrowser && {
-                ways: { undo: history.undoTo !== null, redo: history.redoTo !== null },
-                onStep: (direction) => onStep(direction, false),
-                keptAt: kept.keptAt,
-                said: words,
+        </Suspense>
+      )}
+      <Form
+        method="post"
+        {...getFormProps(form)}
+        onInput={({ target }) => isText(target) && history.type()}
+        onBlur={({ target }) => isText(target) && history.settle()}
+      >
+        <UnsavedGuard
+          dirty={said !== opened}
+          stands="What you changed here is not saved yet. This browser keeps it as a draft until you sign out."
+        />
+        <Suspense>
+          {conflict ? (
+            <StackConflict
+              conflict={conflict}
+              mine={typed}
+              opened={conflict.version === basis.version ? null : basis.text}
+              names={choices}
+              address={`/stacks/${stackId ?? ""}`}
+              onTakeTheirs={() => takeTheirs(conflict)}
+            />
+          ) : (
+            <FormHead lastResult={lastResult === null || props.conflict ? null : lastResult} />
+          )}
+          {found && (
+            <DraftOffer
+              draft={found}
+              version={basis.version}
+              more={kept.offered.length - 1}
+              onTake={() => takeDraft(found)}
+              onForget={() => kept.settle(found)}
+            />
+          )}
+        </Suspense>
+        {basis.version !== null && <input type="hidden" name="version" value={conflict?.version ?? basis.version} />}
+        {programs === null && <input type="hidden" name="program" value={basis.text.program} />}
+        <StackPanes
+          build={
+            <StackBuild
+              form={form}
+              fields={fields}
+              programs={programs}
+              choices={choices}
+              draft={draft}
+              drawn={drawn}
+              panel={panel}
+              limits={limits}
+              part={selection.part}
+              focusPart={focusPart}
+              edits={edits}
+              bar={
+                inBrowser && {
+                  ways: { undo: history.undoTo !== null, redo: history.redoTo !== null },
+                  onStep: (direction) => onStep(direction, false),
+                  keptAt: kept.keptAt,
+                  said: words,
+                }
               }
-            }
-          />
-        }
-        answer={<StackAnswer panel={live.panel} limits={limits} status={statusOf(draft.faults, live, goTo)} />}
-        findings={
-          <StackFindings
-            name={typed.name || "New stack"}
-            draft={drawn}
-            panel={panel}
-            overlay={overlay}
-            limits={limits}
-            options={
-              <>
-                <ViewOptions
-                  view={view}
-                  others={others}
-                  typed={{
-                    at,
-                    understood: read?.ok ? read.understood : undefined,
-                    fault: read && !read.ok ? read.message : undefined,
-                    onType: setAt,
-                  }}
-                />
-                <noscript>
-                  <button type="submit" name="intent" value="estimate" className="btn mb-3">
-                    Work it out without saving
-                  </button>
-                </noscript>
-              </>
-            }
-          />
-        }
-      />
-    </Form>
+            />
+          }
+          answer={<StackAnswer panel={live.panel} limits={limits} status={statusOf(draft.faults, live, goTo)} />}
+          findings={
+            <StackFindings
+              name={typed.name || "New stack"}
+              draft={drawn}
+              panel={panel}
+              overlay={overlay}
+              limits={limits}
+              options={
+                <>
+                  <ViewOptions
+                    view={view}
+                    others={others}
+                    typed={{
+                      at,
+                      understood: read?.ok ? read.understood : undefined,
+                      fault: read && !read.ok ? read.message : undefined,
+                      onType: setAt,
+                    }}
+                  />
+                  <noscript>
+                    <button type="submit" name="intent" value="estimate" className="btn mb-3">
+                      Work it out without saving
+                    </button>
+                  </noscript>
+                </>
+              }
+            />
+          }
+        />
+      </Form>
+    </>
   );
 }

@@ -1,4 +1,4 @@
-import type { FormMetadata } from "@conform-to/react";
+import type { FieldName, FormMetadata } from "@conform-to/react";
 import { useEffect, useState } from "react";
 import { copyPlace, crossed, mirroredDeviceSide, mirrorPlace, moved, otherSide } from "#app/lib/stack-edit.ts";
 import type { Side } from "#app/engine/vocabulary.ts";
@@ -18,6 +18,10 @@ export interface LayerEdits {
   mirror: (index: number) => void;
   cross: (index: number) => void;
   mirrorAll: () => void;
+  /** asks for a film that the library lacks */
+  typeFilm: (index: number) => void;
+  /** puts a film that the library has now, and its thickness as it was typed, into that place */
+  putFilm: (index: number, film: { id: string; name: string; thickness: string }) => void;
 }
 
 interface Hold {
@@ -27,6 +31,7 @@ interface Hold {
   names: readonly string[];
   select: (part: CutPartOf) => void;
   expect: (index: number) => void;
+  typeFilm: (index: number) => void;
   /** is told before anything is done */
   settle: () => void;
   /** what was done, for who does not see it */
@@ -129,6 +134,21 @@ function layerEdits(first: Hold): { edits: LayerEdits; follow: (hold: Hold) => v
       const { films, index: to } = crossed(text.layers, index);
       put(films, to);
       announce(`${nameOf(index)} is on the ${sideWords(otherSide(film.side))} now`);
+    },
+    typeFilm: (index) => now().typeFilm(index),
+    putFilm: (index, { id, name, thickness }) => {
+      const { text, form, settle, expect, announce } = now();
+      const layer = text.layers[index];
+      if (!layer) return;
+      settle();
+      expect(index);
+      const typed = { ...layer.thickness, value: thickness };
+      form.update({
+        name: `layers[${index}]` as FieldName<LayerText>,
+        value: { ...layer, film: id, thickness: typed },
+      });
+      announce(`${name} is in the library and in the stack`);
+      keepFocus(index);
     },
     mirrorAll: () => {
       const { text, settle, announce } = now();
