@@ -1,3 +1,4 @@
+import { memo } from "react";
 import { noBreak } from "#app/components/drawings/no-break.ts";
 import { formatQuantity } from "#app/engine/units/format.ts";
 import { filmForces, type FilmForce } from "#app/lib/film-forces.ts";
@@ -15,7 +16,7 @@ const forceWords = (force: number) =>
 const senseWords = (force: number) => (force === 0 ? "no force" : force > 0 ? "tension" : "compression");
 
 /** Which film pulls how much: force per width of wafer of each, its share of what bends the wafer, and their sums. */
-export function FilmForces({ estimated, names }: Props) {
+export const FilmForces = memo(function FilmForces({ estimated, names }: Props) {
   const { films: forces, front, back, net } = filmForces(estimated);
   if (forces.length === 0) return null;
   const films = turnFront(forces.map((film, index) => ({ ...film, name: names[index] })));
@@ -80,7 +81,7 @@ export function FilmForces({ estimated, names }: Props) {
       </p>
     </section>
   );
-}
+});
 
 const directionWords = (bends: number) => (bends > 0 ? "edges up" : "edges down");
 

@@ -1,3 +1,4 @@
+import { memo } from "react";
 import { FindingTag } from "#app/components/drawings/FindingTag.tsx";
 import { noBreak } from "#app/components/drawings/no-break.ts";
 import { ROOM_TEMPERATURE } from "#app/engine/laminate/layer.ts";
@@ -30,8 +31,19 @@ interface Props {
   status: Status;
 }
 
-/** The answer first: what holds the wafer, one or two sentences, and the figures that they rest on. */
-export function StackAnswer({ panel, limits, status }: Props) {
+/**
+ * The answer first: what holds the wafer, one or two sentences, and the figures that they rest on. Drawn anew only when one of them says
+ * something else; the ways on of a status are the same for the same words.
+ */
+export const StackAnswer = memo(
+  AnswerSection,
+  (before, after) =>
+    before.panel === after.panel &&
+    before.limits === after.limits &&
+    JSON.stringify(before.status) === JSON.stringify(after.status),
+);
+
+function AnswerSection({ panel, limits, status }: Props) {
   if (!panel)
     return (
       <section aria-label="Answer" className="p-4 tablet:p-6">

@@ -10,7 +10,7 @@ import { SourceFields } from "./SourceFields.tsx";
 import type { CutPartOf } from "./stack-cut-layers.ts";
 import { StackCut } from "./StackCut.tsx";
 import { fieldId } from "./stack-fields.ts";
-import { StackHeadFields } from "./StackHeadFields.tsx";
+import { headStamp, StackHeadFields } from "./StackHeadFields.tsx";
 import { StackToolBar, type StackToolBarProps } from "./StackToolBar.tsx";
 import type { LayerEdits } from "./use-layer-edits.ts";
 
@@ -34,13 +34,18 @@ interface Props {
 /** The left pane: what is built, the cut with the fields of its films beside it. */
 export function StackBuild(props: Props) {
   const { form, fields, programs, choices, draft, drawn, panel, limits, part, focusPart, edits, bar } = props;
-  const layers = fields.layers.getFieldList();
   return (
     <>
       {bar && (
         <StackToolBar {...bar} onMirror={draft.layers.some(({ side }) => side === "front") ? edits.mirrorAll : null} />
       )}
-      <StackHeadFields fields={fields} programs={programs} silicon={choices.silicon} draft={draft} />
+      <StackHeadFields
+        fields={fields}
+        programs={programs}
+        silicon={choices.silicon}
+        draft={draft}
+        stamp={headStamp(fields, draft)}
+      />
       <div className="@container border-b border-line">
         <div className="grid grid-cols-[minmax(0,1fr)] @min-[700px]:grid-cols-[464px_minmax(0,1fr)]">
           <div className="p-4 tablet:px-0">
@@ -55,7 +60,7 @@ export function StackBuild(props: Props) {
                   edits.select(of);
                   if (of === "silicon") focusPart(of);
                 },
-                onAdd: (side) => form.insert(insertion(fields.layers.name, side, layers.length)),
+                onAdd: (side) => form.insert(insertion(fields.layers.name, side, draft.layers.length)),
                 onShift: edits.shift,
                 onPlace: edits.place,
               }}

@@ -1,5 +1,5 @@
 import { getFormProps, type SubmissionResult } from "@conform-to/react";
-import { lazy, Suspense, useCallback, useDeferredValue, useState } from "react";
+import { lazy, Suspense, useCallback, useDeferredValue, useMemo, useState } from "react";
 import { Form } from "react-router";
 import { FormHead } from "#app/components/forms/FormHead.tsx";
 import { UnsavedGuard } from "#app/components/forms/UnsavedGuard.tsx";
@@ -54,7 +54,6 @@ interface Props extends StackAround {
   saved: boolean;
 }
 
-const jsonOf = (text: unknown) => JSON.stringify(stackText(text));
 const textOf = (said: string) => stackText(JSON.parse(said));
 
 /** A stack being built, with what follows from it beside it, live. */
@@ -67,7 +66,7 @@ export function StackEditor(props: Props) {
   const [form, fields] = useRecordForm<StackText>({ id: STACK_FORM, lastResult, defaultValue: basis.text });
   const typed = stackText(form.value);
   const said = JSON.stringify(typed);
-  const opened = jsonOf(basis.text);
+  const opened = useMemo(() => JSON.stringify(stackText(basis.text)), [basis]);
   const draft = useStackDraft(said, choices);
   const history = useStackHistory(said);
   const kept = useKeptDraft({ person, record: stackId ?? "new", version: basis.version, opened, said, saved });
@@ -122,7 +121,7 @@ export function StackEditor(props: Props) {
   };
   const goTo = ({ field }: DraftFault) => {
     const film = filmOf(field);
-    if (film !== null) selection.select(film);
+    if (film !== null) edits.select(film);
     requestAnimationFrame(() => focusField(field));
   };
   const inBrowser = useInBrowser();

@@ -37,7 +37,10 @@ export function StackToolBar({ ways, onStep, onMirror, keptAt, said }: StackTool
 }
 
 /** As the clock of the person's wall shows it. */
-const timeOf = (at: string) => new Date(at).toLocaleTimeString("en-GB", { hour: "2-digit", minute: "2-digit" });
+function timeOf(at: string): string {
+  const then = new Date(at);
+  return [then.getHours(), then.getMinutes()].map((part) => String(part).padStart(2, "0")).join(":");
+}
 
 interface StepProps {
   direction: Direction;
