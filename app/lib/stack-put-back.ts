@@ -44,16 +44,28 @@ const isParts = (value: unknown): value is Record<string, unknown> =>
   typeof value === "object" && value !== null && !Array.isArray(value);
 
 function layersChange(from: readonly LayerText[], to: readonly LayerText[]): FormChange {
-  const first = to.findIndex((layer, index) => !same(from[index], layer));
-  const index = first === -1 ? to.length : first;
   const more = to.length - from.length;
-  const rest = (list: readonly LayerText[], after: number) => list.slice(index + after);
+  const first = firstOther(from, to);
+  // Of several alike in a row the uppermost is the one that comes or goes.
+  const index = more === 0 ? first : topOfRun(more > 0 ? to : from, first);
   const layer = to[index];
   const field = `layers[${Math.max(0, Math.min(index, to.length - 1))}].film`;
-  if (more === 1 && layer && same(rest(from, 0), rest(to, 1))) return { kind: "insert", index, value: layer, field };
-  if (more === -1 && same(rest(from, 1), rest(to, 0))) return { kind: "remove", index, field };
-  if (more === 0 && layer && same(rest(from, 1), rest(to, 1))) return updated(`layers[${index}]`, from[index], layer);
+  if (more === 1 && layer && same(from, to.toSpliced(index, 1))) return { kind: "insert", index, value: layer, field };
+  if (more === -1 && same(from.toSpliced(index, 1), to)) return { kind: "remove", index, field };
+  const alone = more === 0 && layer && same(from.slice(index + 1), to.slice(index + 1));
+  if (alone) return updated(`layers[${index}]`, from[index], layer);
   return { kind: "update", name: "layers", value: to, field };
+}
+
+function firstOther(from: readonly LayerText[], to: readonly LayerText[]): number {
+  const first = to.findIndex((layer, index) => !same(from[index], layer));
+  return first === -1 ? to.length : first;
+}
+
+function topOfRun(layers: readonly LayerText[], index: number): number {
+  let top = index;
+  while (top > 0 && same(layers[top - 1], layers[top])) top -= 1;
+  return top;
 }
 
 /** The film that a field's name belongs to; null for one of the stack itself. */

@@ -129,6 +129,8 @@ test.describe("an engineer", () => {
   });
 
   test("drags a film in the cut, through the silicon too", async ({ page }) => {
+    // So that all of the cut is within reach of the mouse.
+    await page.setViewportSize({ width: 1440, height: 1400 });
     await fillNew(page, nameFor("drag"));
     await page.mouse.move(...(await middle(page, 0)));
     await page.mouse.down();

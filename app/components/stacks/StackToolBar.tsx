@@ -16,7 +16,7 @@ export interface StackToolBarProps {
 /** Undo and redo, what is done to the stack as a whole, and whether what is typed is kept. */
 export function StackToolBar({ ways, onStep, onMirror, keptAt, said }: StackToolBarProps) {
   return (
-    <div className="flex min-h-14 flex-wrap items-center gap-2 border-b border-line px-4 py-2 tablet:px-5">
+    <div className="flex min-h-16 flex-wrap items-center gap-2 border-b border-line px-4 py-2 tablet:px-5">
       <StepButton direction="undo" words="Undo" can={ways.undo} onStep={onStep} />
       <StepButton direction="redo" words="Redo" can={ways.redo} onStep={onStep} />
       <button
@@ -28,8 +28,10 @@ export function StackToolBar({ ways, onStep, onMirror, keptAt, said }: StackTool
       >
         Mirror the device side
       </button>
-      <p className="ml-auto min-w-0 text-right text-label text-quiet">
-        <span role="status">{said}</span>
+      <p className="min-w-0 grow basis-full text-label text-quiet tablet:basis-0 tablet:text-right">
+        <span role="status" className="line-clamp-2" title={said}>
+          {said}
+        </span>
         {keptAt !== null && <span className="block">Draft kept {timeOf(keptAt)}</span>}
       </p>
     </div>

@@ -48,12 +48,10 @@ describe("a film that changes sides", () => {
     expect([names(inner.films), inner.index]).toEqual(["f:f1 f:f2 f:f3 f:b1 b:b2", 3]);
   });
 
-  it("comes back to where it was", () => {
-    for (const index of STACK.keys()) {
+  it("comes back to where it was, unless it had more under it than the other side has films", () => {
+    for (const index of [1, 2, 3, 4]) {
       const there = crossed(STACK, index);
       const back = crossed(there.films, there.index);
-      // Only a film that had more under it than the other side has films comes to lie lower.
-      if (index === 0) continue;
       expect(names(back.films)).toBe(names(STACK));
       expect(back.index).toBe(index);
     }

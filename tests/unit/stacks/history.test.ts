@@ -73,6 +73,14 @@ describe("putting a state back", () => {
     expect(name(withLayers([...TEXT.layers, layerText({})]))).toBe("insert");
   });
 
+  it("takes the uppermost of several films alike", () => {
+    const [first, ...rest] = TEXT.layers;
+    if (!first) throw new Error("The sample has films.");
+    const twice = withLayers([first, first, ...rest]);
+    expect(putBack(twice, TEXT)).toMatchObject({ kind: "remove", index: 0, field: "layers[0].film" });
+    expect(putBack(TEXT, twice)).toMatchObject({ kind: "insert", index: 0, field: "layers[0].film" });
+  });
+
   it("leads from any state to any other", () => {
     const layer = fc.record({
       side: fc.constantFrom("front" as const, "back" as const),
