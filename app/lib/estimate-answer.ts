@@ -67,7 +67,11 @@ export function* estimating(
         warp_linear: uncertainty?.linear ?? null,
       },
       support: support ?? { class: null, because: NO_LIMITS },
-      film_force: { front_N_per_m: filmForce.front, back_N_per_m: filmForce.back },
+      film_force: {
+        front_N_per_m: filmForce.front,
+        back_N_per_m: filmForce.back,
+        films_N_per_m: filmForce.films,
+      },
       curls_below_m: curlsBelow,
       ...(request.sweep && { sweep: sweepOf(stack, request.sweep) }),
       ...(request.working && workingsOf && { working: workingsOf(stack, estimate) }),

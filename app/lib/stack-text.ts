@@ -85,10 +85,7 @@ export function stackText(payload: unknown): StackText {
           film: textAt(layer, "film"),
           thickness: measuredAt(layer, "thickness"),
           stress: measuredAt(layer, "stress"),
-          cut: textAt(layer, "cut"),
-          coverage: textAt(layer, "coverage"),
-          lineWidth: textAt(layer, "lineWidth"),
-          lineDirection: textAt(layer, "lineDirection"),
+          ...cutAt(layer),
         }))
       : [],
   };
@@ -106,6 +103,18 @@ function at(value: unknown, key: string): unknown {
 function textAt(value: unknown, key: string): string {
   const found = at(value, key);
   return typeof found === "string" ? found : "";
+}
+
+/** Fields that the cut does not ask for go from the page once it is chosen: they say nothing any more. */
+function cutAt(layer: unknown): FilmCutText {
+  const cut = textAt(layer, "cut");
+  const asked = (name: string, by: boolean) => (by ? textAt(layer, name) : "");
+  return {
+    cut,
+    coverage: asked("coverage", cut !== "whole"),
+    lineWidth: asked("lineWidth", cut === "lines"),
+    lineDirection: asked("lineDirection", cut === "lines"),
+  };
 }
 
 function measuredAt(value: unknown, key: string) {

@@ -144,8 +144,8 @@ export interface EstimateAnswer {
   };
   /** to lift it, at nominal minus tolerance; class null where the site has no limits for the diameter */
   support: { class: SupportClass | null; because: string };
-  /** stress times thickness times coverage of each side, tension positive; of lines the mean of along and across */
-  film_force: { front_N_per_m: number; back_N_per_m: number };
+  /** stress times thickness times coverage of each side and of each film, tension positive; of lines the mean of along and across */
+  film_force: { front_N_per_m: number; back_N_per_m: number; films_N_per_m: number[] };
   /** free silicon thinner than this rolls about one axis; null when none from 1 µm to 2 mm does, 2 mm when all of it does */
   curls_below_m: number | null;
   sweep?: { thickness_m: number; warp_m: number; linear_warp_m: number; regime: ShapeRegime }[];

@@ -1,4 +1,5 @@
 import type { StackAround } from "#app/lib/stack-around.ts";
+import type { StackConflict } from "#app/lib/stack-conflict.ts";
 import { stackDraft, type StackChoices } from "#app/lib/stack-draft.ts";
 import type { StackPanel } from "#app/lib/stack-panel.ts";
 import { newStackText, stackText, textOfStack, type StackText } from "#app/lib/stack-text.ts";
@@ -72,12 +73,19 @@ export async function typedStack(scope: ActorScope, formData: FormData, payload:
   return { view: around.view, overlay: around.overlay, panel: panelOfText(stackText(payload), around) };
 }
 
+/** What somebody else has saved meanwhile, as the form would show it now. */
+export async function stackConflict(scope: ActorScope, id: string): Promise<StackConflict> {
+  const stack = await getStack(scope, id);
+  const { version, updatedBy, updatedAt } = stack.stamp;
+  return { by: updatedBy, at: updatedAt, version, theirs: textOfStack(stack) };
+}
+
 /** Everything that the page of a stored stack shows. */
 export async function stackPage(scope: ActorScope, id: string | undefined, search: URLSearchParams) {
   const stack = await getStack(scope, id);
   const around = await surroundings(scope, search, stack.id);
   const text = textOfStack(stack);
-  return { stack, text, ...around, panel: panelOfText(text, around) };
+  return { stack, text, ...around, person: scope.actor.id, panel: panelOfText(text, around) };
 }
 
 /** Everything that the page of a new stack shows: blank, or a copy of the stack that the address names as `from`. */
@@ -89,5 +97,5 @@ export async function newStackPage(scope: ActorScope, search: URLSearchParams) {
   const text = copied
     ? { ...textOfStack(copied), name: `Copy of ${copied.name}`.slice(0, 120) }
     : newStackText(programs.length === 1 ? (programs[0]?.id ?? "") : "");
-  return { programs, text, ...around, panel: panelOfText(text, around) };
+  return { programs, text, ...around, person: scope.actor.id, panel: panelOfText(text, around) };
 }

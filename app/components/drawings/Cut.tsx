@@ -7,6 +7,7 @@ import type { CutLayer } from "./cut-layer.ts";
 import { CUT, cutLayout, labelBaselines, NAME_SIZE, type CutPlace } from "./cut-layout.ts";
 import { CutPart } from "./CutPart.tsx";
 import { selectInPlace } from "./select-in-place.ts";
+import { useCutDrag } from "./use-cut-drag.ts";
 
 /** The words at one end of the cut, with the link that adds a film there. */
 export interface CutEnd {
@@ -29,6 +30,10 @@ export interface CutProps {
   hrefFor?: (index: number) => string;
   /** Selects a layer in place; with hrefFor it replaces the navigation, alone it makes every layer a button. */
   onSelect?: (index: number) => void;
+  /** Moves a film one place up or down; with it Alt and an arrow key do so. False where it stays. */
+  onShift?: (index: number, by: 1 | -1) => boolean;
+  /** Moves a film before another layer, the number of layers being the foot; with it films can be dragged. */
+  onMove?: (move: { from: number; before: number }) => void;
   /** Explains heights and arrows under the cut. */
   showKey?: boolean;
   /** The free shape that results, under everything. */
@@ -43,10 +48,11 @@ const SHAPE_HEIGHT = 84;
 
 /**
  * The cut: a stack drawn layer by layer on a compressed scale, with its thicknesses, stresses and sources. It is the
- * editor's list of layers: each is one focusable part. Arrow keys move between layers, Enter selects.
+ * editor's list of layers: each is one focusable part. Arrow keys move between layers, Enter selects; where films can be
+ * moved, they are dragged, or Alt and an arrow key move them.
  */
 export function Cut(props: CutProps) {
-  const { layers, top, bottom, label, hrefFor, onSelect, showKey = false, shape } = props;
+  const { layers, top, bottom, label, hrefFor, onSelect, onShift, onMove, showKey = false, shape } = props;
   const layout = cutLayout(
     layers.map((layer) => ({
       thickness: layer.thickness,
@@ -59,6 +65,7 @@ export function Cut(props: CutProps) {
     const place = layout.places[index];
     return place ? [{ layer, place, index }] : [];
   });
+  const { drag, handle } = useCutDrag(layout.places, onMove);
   const endY = layout.bottom + (bottom.add ? 48 : 28);
   const keyY = Math.max(endY, layout.foot) + 28;
   const shapeY = showKey ? keyY + KEY_HEIGHT : Math.max(endY, layout.foot) + 12;
@@ -74,7 +81,7 @@ export function Cut(props: CutProps) {
       <End end={top} y={layout.top - (top.add ? 34 : 14)} />
       <g aria-hidden="true" pointerEvents="none">
         {parts.map(({ layer, place, index }) => (
-          <g key={index}>
+          <g key={index} opacity={drag?.from === index ? 0.5 : undefined}>
             <LabelWash layer={layer} place={place} />
             <CutBand layer={layer} y={place.y} height={place.height} />
             <Dimension layer={layer} place={place} />
@@ -87,12 +94,21 @@ export function Cut(props: CutProps) {
         )}
       </g>
       {parts.map(({ layer, place, index }) => (
-        <CutPart key={index} layer={layer} index={index} href={hrefFor?.(index)} onSelect={onSelect}>
+        <CutPart
+          key={index}
+          layer={layer}
+          index={index}
+          href={hrefFor?.(index)}
+          onSelect={onSelect}
+          onShift={layer.role === "film" ? onShift : undefined}
+          drag={layer.role === "film" ? handle?.(index) : undefined}
+        >
           <rect {...labelBox(place)} fill="transparent" />
           <Outline place={place} away={0} className="hover-outline" />
           <Outline place={place} away={5} className="focus-mark" />
         </CutPart>
       ))}
+      {drag ? <DropMark y={layout.places[drag.before]?.y ?? layout.bottom} /> : null}
       <End end={bottom} y={layout.bottom + 22} />
       {showKey ? <CutKey y={keyY} /> : null}
       {shape ? <Shape shape={shape} y={shapeY} /> : null}
@@ -115,6 +131,18 @@ function End({ end, y }: { end: CutEnd; y: number }) {
         </a>
       ) : null}
     </>
+  );
+}
+
+/** Where the film that is being moved would go. */
+function DropMark({ y }: { y: number }) {
+  return (
+    <path
+      d={`M${CUT.left - 10} ${y + 0.5}H${CUT.right + 10}`}
+      stroke={colour("copper")}
+      strokeWidth="4"
+      pointerEvents="none"
+    />
   );
 }
 

@@ -1,4 +1,4 @@
-import type { KeyboardEvent, ReactNode } from "react";
+import type { KeyboardEvent, ReactNode, SVGAttributes } from "react";
 import type { CutLayer } from "./cut-layer.ts";
 import { selectInPlace } from "./select-in-place.ts";
 
@@ -9,6 +9,10 @@ export interface CutPartProps {
   href?: string;
   /** Selects it in place. */
   onSelect?: (index: number) => void;
+  /** Moves it one place; false where it stays. */
+  onShift?: (index: number, by: 1 | -1) => boolean;
+  /** What a pointer does that drags it. */
+  drag?: SVGAttributes<SVGElement>;
   children: ReactNode;
 }
 
@@ -20,7 +24,7 @@ function spoken(layer: CutLayer): string {
 /**
  * One layer as a focusable part of the cut: a link where there is an address, else a button, else a picture with a name.
  */
-export function CutPart({ layer, index, href, onSelect, children }: CutPartProps) {
+export function CutPart({ layer, index, href, onSelect, onShift, drag, children }: CutPartProps) {
   const name = { "aria-label": spoken(layer), "data-layer": index };
   const current = layer.selected ? ("true" as const) : undefined;
   if (href !== undefined) {
@@ -29,9 +33,11 @@ export function CutPart({ layer, index, href, onSelect, children }: CutPartProps
         className="drawing-link"
         href={href}
         {...name}
+        {...(drag as object)}
         aria-current={current}
+        aria-keyshortcuts={onShift && "Alt+ArrowUp Alt+ArrowDown"}
         onClick={selectInPlace(onSelect && (() => onSelect(index)))}
-        onKeyDown={moveFocus}
+        onKeyDown={(event) => moveFocus(event, onShift)}
       >
         {children}
       </a>
@@ -67,12 +73,16 @@ export function CutPart({ layer, index, href, onSelect, children }: CutPartProps
   );
 }
 
-/** Up and down arrows go to the neighbouring layer. */
-function moveFocus(event: KeyboardEvent<HTMLElement | SVGElement>) {
+/** Up and down arrows go to the neighbouring layer; with Alt the layer goes there, and the focus with it. */
+function moveFocus(event: KeyboardEvent<HTMLElement | SVGElement>, onShift?: CutPartProps["onShift"]) {
   const step = event.key === "ArrowDown" ? 1 : event.key === "ArrowUp" ? -1 : 0;
   if (step === 0) return;
   const here = Number(event.currentTarget.dataset.layer);
   const next = event.currentTarget.closest("svg")?.querySelector(`[data-layer="${here + step}"]`);
+  if (event.altKey && onShift) {
+    event.preventDefault();
+    if (!onShift(here, step)) return;
+  }
   if (next instanceof SVGElement) {
     event.preventDefault();
     next.focus();

@@ -19,6 +19,12 @@ interface Props {
 /** A quantity typed with its unit. What was understood stands below as it is typed; a fault is said in a sentence. */
 export function QuantityField({ field, label, dimension, rule, example, hint, className = "" }: Props) {
   const [typed, setTyped] = useState(textOf(field.initialValue));
+  // Another key says that another text has been put into the field.
+  const [key, setKey] = useState(field.key);
+  if (key !== field.key) {
+    setKey(field.key);
+    setTyped(textOf(field.initialValue));
+  }
   // What the server said is about what was sent: it goes with the first key, until the server has said something again.
   const [answered, setAnswered] = useState<string[]>();
   const error = field.errors === answered ? undefined : field.errors?.[0];

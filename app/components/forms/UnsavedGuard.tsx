@@ -8,7 +8,14 @@ const saidSo = ({ state }: Location) =>
   typeof state === "object" && state !== null && "leave" in state && state.leave === true;
 
 /** Asks before unsaved edits are left behind, within the application and when the window closes. */
-export function UnsavedGuard({ dirty }: { dirty: boolean }) {
+export function UnsavedGuard({
+  dirty,
+  stands = "What you changed here is not saved yet.",
+}: {
+  dirty: boolean;
+  /** what becomes of it */
+  stands?: string;
+}) {
   const dialog = useRef<HTMLDialogElement>(null);
   const blocker = useBlocker(
     ({ currentLocation, nextLocation }) =>
@@ -35,7 +42,7 @@ export function UnsavedGuard({ dirty }: { dirty: boolean }) {
       <h2 id="unsaved" className="text-lead font-semibold">
         Leave without saving?
       </h2>
-      <p className="mt-1">What you changed here is not saved yet.</p>
+      <p className="mt-1">{stands}</p>
       <div className="mt-4 flex flex-wrap gap-2">
         <button type="button" className="btn btn-primary" onClick={() => blocker.reset?.()}>
           Stay here

@@ -1,3 +1,4 @@
+import { memo } from "react";
 import { Link } from "react-router";
 import type { StackDraft } from "#app/lib/stack-draft.ts";
 
@@ -7,7 +8,7 @@ interface Assumed {
 }
 
 /** What nobody measured or stated: assumed values stay visible wherever figures rest on them. */
-export function AssumedInputs({ draft }: { draft: StackDraft }) {
+export const AssumedInputs = memo(function AssumedInputs({ draft }: { draft: StackDraft }) {
   const inputs = assumedInputs(draft);
   if (inputs.length === 0) return null;
   return (
@@ -29,7 +30,7 @@ export function AssumedInputs({ draft }: { draft: StackDraft }) {
       </ul>
     </section>
   );
-}
+});
 
 function assumedInputs({ thickness, thicknessSource, layers }: StackDraft): Assumed[] {
   const silicon = thickness !== null && thicknessSource === "assumed" ? [{ what: "Remaining silicon" }] : [];

@@ -1,3 +1,4 @@
+import { memo } from "react";
 import {
   againstFreeWafer,
   differencePercent,
@@ -14,7 +15,7 @@ const OFF = 5;
  * The bow by three models side by side: the thin-film formula that spreadsheets use, the laminate that takes thick films, and
  * the free wafer beyond small bows. A curled wafer has no bow, so its edge lift stands there.
  */
-export function BowModels({ estimated: { answer } }: { estimated: Estimated }) {
+export const BowModels = memo(function BowModels({ estimated: { answer } }: { estimated: Estimated }) {
   const { stoney, laminate, shape } = answer;
   const curled = shape.regime === "curled";
   const off = differencePercent(Math.abs(stoney.bow_m), Math.abs(laminate.bow_m));
@@ -74,4 +75,4 @@ export function BowModels({ estimated: { answer } }: { estimated: Estimated }) {
       )}
     </section>
   );
-}
+});

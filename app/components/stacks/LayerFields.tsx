@@ -4,6 +4,7 @@ import { ChoiceField } from "#app/components/forms/ChoiceField.tsx";
 import { FilmCutFields } from "#app/components/forms/FilmCutFields.tsx";
 import type { MeasuredText } from "#app/components/forms/MeasuredField.tsx";
 import { QuantityField } from "#app/components/forms/QuantityField.tsx";
+import { useInBrowser } from "#app/components/ui/use-in-browser.ts";
 import { formatMeasured } from "#app/lib/format-measured.ts";
 import { toleranceRule, type QuantityRule } from "#app/lib/read-quantity.ts";
 import type { DraftLayer, FilmChoice } from "#app/lib/stack-draft.ts";
@@ -16,10 +17,12 @@ interface Props {
   field: FieldMetadata<LayerText>;
   draft: DraftLayer | undefined;
   films: readonly FilmChoice[];
+  /** opens what a film that the library lacks is typed into */
+  onTypeFilm: () => void;
 }
 
 /** The fields of one film of the stack. */
-export function LayerFields({ field, draft, films }: Props) {
+export function LayerFields({ field, draft, films, onTypeFilm }: Props) {
   const { side, film, thickness, stress } = field.getFieldset();
   const thicknessParts = thickness.getFieldset();
   const stressParts = stress.getFieldset();
@@ -31,6 +34,7 @@ export function LayerFields({ field, draft, films }: Props) {
         label="Film"
         choices={films.map(({ id, name }) => ({ value: id, label: name }))}
         blank="Choose"
+        hint={<TypeFilm onTypeFilm={onTypeFilm} />}
       />
       <QuantityField
         field={thicknessParts.value}
@@ -58,6 +62,22 @@ export function LayerFields({ field, draft, films }: Props) {
         <Provenance parts={stressParts} of="stress" rule={RULES.stress} />
       </details>
     </div>
+  );
+}
+
+/** The way to a film that the library lacks: beside the stack, or without scripts on a page of its own. */
+function TypeFilm({ onTypeFilm }: Pick<Props, "onTypeFilm">) {
+  const inBrowser = useInBrowser();
+  if (inBrowser)
+    return (
+      <button type="button" className="link cursor-pointer" onClick={onTypeFilm}>
+        Not in the library? Type it here
+      </button>
+    );
+  return (
+    <Link to="/films/new" className="link">
+      Not in the library? Add it there
+    </Link>
   );
 }
 

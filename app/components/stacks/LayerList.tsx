@@ -5,7 +5,10 @@ import type { Side } from "#app/engine/vocabulary.ts";
 import type { DraftLayer, FilmChoice, StackDraft } from "#app/lib/stack-draft.ts";
 import { newLayer, type LayerText, type StackText } from "#app/lib/stack-text.ts";
 import { lengthWords } from "#app/lib/stack-words.ts";
+import { LayerActions } from "./LayerActions.tsx";
 import { LayerFields } from "./LayerFields.tsx";
+import { shiftByKey } from "./shift-by-key.ts";
+import type { LayerEdits } from "./use-layer-edits.ts";
 
 interface Props {
   form: FormMetadata<StackText>;
@@ -14,7 +17,7 @@ interface Props {
   films: readonly FilmChoice[];
   /** position in the list, null when the silicon is selected */
   selected: number | null;
-  onSelect: (index: number) => void;
+  edits: LayerEdits;
 }
 
 /** Where a new film goes in the list, which runs from the top of the cut to its foot. */
@@ -28,7 +31,7 @@ export const insertion = (name: FieldMetadata<LayerText[]>["name"], side: Side, 
  * All films as fields, top to bottom as the cut shows them. With scripts the selected one is open and the others are folded;
  * without them all are open.
  */
-export function LayerList({ form, field, draft, films, selected, onSelect }: Props) {
+export function LayerList({ form, field, draft, films, selected, edits }: Props) {
   const list = field.getFieldList();
   const on = (side: Side) => list.flatMap((_, index) => (draft.layers[index]?.side === side ? [index] : []));
   const part = (index: number, among: number[]) => {
@@ -45,7 +48,7 @@ export function LayerList({ form, field, draft, films, selected, onSelect }: Pro
           incomplete={draft.faults.some(({ field: name }) => name.startsWith(`layers[${index}].`))}
           films={films}
           selected={selected === index}
-          onSelect={onSelect}
+          edits={edits}
         />
       )
     );
@@ -99,7 +102,7 @@ interface PartProps {
   incomplete: boolean;
   films: readonly FilmChoice[];
   selected: boolean;
-  onSelect: (index: number) => void;
+  edits: LayerEdits;
 }
 
 /** A key typed into one film leaves the fields of all others as they are: twenty films are hundreds of fields. */
@@ -116,19 +119,24 @@ const LayerPart = memo(
     before.place.last === after.place.last,
 );
 
-function LayerFold({ form, field, place, draft, incomplete, films, selected, onSelect }: PartProps) {
+function LayerFold({ form, field, place, draft, incomplete, films, selected, edits }: PartProps) {
   const inBrowser = useInBrowser();
   const { index, count, first, last } = place;
   const name = draft?.name ?? `film ${index + 1}`;
   // What the server has refused stays open until it is mended.
   const shown = selected || (incomplete && Object.keys(field.allErrors).length > 0);
   return (
-    <details id={`layer-${index}`} open={!inBrowser || shown} className="border-t border-line">
+    <details
+      id={`layer-${index}`}
+      open={!inBrowser || shown}
+      className="border-t border-line"
+      onKeyDown={(event) => shiftByKey(event, (by) => edits.shift(index, by))}
+    >
       <summary
         className={`flex min-h-10 cursor-pointer flex-wrap items-baseline gap-x-2 px-4 py-2 ${selected ? "bg-wash" : ""}`}
         onClick={(event) => {
           event.preventDefault();
-          onSelect(index);
+          edits.select(index);
         }}
       >
         <span className={selected ? "font-semibold" : ""}>{draft?.film ? name : "Film not chosen"}</span>
@@ -144,41 +152,17 @@ function LayerFold({ form, field, place, draft, incomplete, films, selected, onS
         <legend className="sr-only">
           {name}, {index + 1} of {count} from the top
         </legend>
-        <LayerFields field={field} draft={draft} films={films} />
-        <div className="mt-4 grid grid-cols-2 gap-3">
-          <MoveButton form={form} from={index} to={index - 1} disabled={first} words="Move up" of={name} />
-          <MoveButton form={form} from={index} to={index + 1} disabled={last} words="Move down" of={name} />
-          <button
-            {...form.remove.getButtonProps({ name: "layers", index })}
-            className="btn btn-remove col-span-2"
-            aria-label={`Remove ${name}`}
-          >
-            Remove film
-          </button>
-        </div>
+        <LayerFields field={field} draft={draft} films={films} onTypeFilm={() => edits.typeFilm(index)} />
+        <LayerActions
+          form={form}
+          index={index}
+          side={draft?.side ?? "front"}
+          first={first}
+          last={last}
+          name={name}
+          edits={edits}
+        />
       </fieldset>
     </details>
-  );
-}
-
-interface MoveProps {
-  form: FormMetadata<StackText>;
-  from: number;
-  to: number;
-  disabled: boolean;
-  words: string;
-  of: string;
-}
-
-function MoveButton({ form, from, to, disabled, words, of }: MoveProps) {
-  return (
-    <button
-      {...form.reorder.getButtonProps({ name: "layers", from, to })}
-      className="btn"
-      disabled={disabled}
-      aria-label={`${words}: ${of}`}
-    >
-      {words}
-    </button>
   );
 }

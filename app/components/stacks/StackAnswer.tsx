@@ -1,3 +1,4 @@
+import { memo } from "react";
 import { FindingTag } from "#app/components/drawings/FindingTag.tsx";
 import { noBreak } from "#app/components/drawings/no-break.ts";
 import { ROOM_TEMPERATURE } from "#app/engine/laminate/layer.ts";
@@ -9,6 +10,7 @@ import {
   againstFreeWafer,
   answerOutcome,
   answerSentences,
+  bareFrom,
   becauseSentence,
   cautions,
   lengthWords,
@@ -29,8 +31,19 @@ interface Props {
   status: Status;
 }
 
-/** The answer first: what holds the wafer, one or two sentences, and the figures that they rest on. */
-export function StackAnswer({ panel, limits, status }: Props) {
+/**
+ * The answer first: what holds the wafer, one or two sentences, and the figures that they rest on. Drawn anew only when one of them says
+ * something else; the ways on of a status are the same for the same words.
+ */
+export const StackAnswer = memo(
+  AnswerSection,
+  (before, after) =>
+    before.panel === after.panel &&
+    before.limits === after.limits &&
+    JSON.stringify(before.status) === JSON.stringify(after.status),
+);
+
+function AnswerSection({ panel, limits, status }: Props) {
   if (!panel)
     return (
       <section aria-label="Answer" className="p-4 tablet:p-6">
@@ -68,7 +81,7 @@ export function StackAnswer({ panel, limits, status }: Props) {
       <dl
         className={`grid grid-cols-[repeat(auto-fit,minmax(124px,1fr))] overflow-hidden border-t border-line ${stale ? "text-quiet" : ""}`}
       >
-        {figuresOf(panel).map(({ label, value, second }) => (
+        {figuresOf(panel, limits).map(({ label, value, second }) => (
           <div
             key={label}
             className="-mt-px -ml-px border-t border-l border-line px-3 py-2 first:pl-4 first:tablet:pl-6"
@@ -91,8 +104,9 @@ interface PanelFigure {
   second: string;
 }
 
-function figuresOf({ room, hot }: StackPanel): PanelFigure[] {
+function figuresOf({ room, hot }: StackPanel, limits: SiteLimits): PanelFigure[] {
   const { film_force, shape, stoney, curls_below_m } = room.answer;
+  const bare = bareFrom(room, limits);
   const force = (value: number) =>
     formatQuantity(value, "forcePerLength", { unit: "N/m", significant: 3, trim: true, sign: true });
   return [
@@ -113,6 +127,15 @@ function figuresOf({ room, hot }: StackPanel): PanelFigure[] {
       value: `${ratioWords(shape.stability_ratio)} to 1`,
       second: curls_below_m === null ? "does not curl" : `1 at ${limitWords(curls_below_m)}`,
     },
+    ...(bare === null
+      ? []
+      : [
+          {
+            label: "Least silicon, bare",
+            value: limitWords(bare),
+            second: curls_below_m === bare ? "thinner, it curls" : "the site’s limit",
+          },
+        ]),
   ];
 }
 
@@ -133,6 +156,6 @@ function shapeFigure({ answer: { shape } }: Estimated, at: string): PanelFigure 
   return {
     label: `Warp, ${at}`,
     value: warpWords(shape),
-    second: `bow ${bowWords(shape)}, device side up`,
+    second: `bow ${bowWords(shape)}, device side up${warpWords(shape).includes("±") ? "; ± is k = 2" : ""}`,
   };
 }

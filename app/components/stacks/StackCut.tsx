@@ -6,6 +6,7 @@ import { shapeWords } from "#app/lib/stack-words.ts";
 import type { SiteLimits } from "#app/engine/rules/limits.ts";
 import { bowOf, exaggerationOf } from "./bow-of.ts";
 import { stackCutLayers, type CutPartOf } from "./stack-cut-layers.ts";
+import type { LayerEdits } from "./use-layer-edits.ts";
 
 interface Props {
   draft: StackDraft;
@@ -17,6 +18,8 @@ interface Props {
     hrefFor: (part: CutPartOf) => string;
     onSelect: (part: CutPartOf) => void;
     onAdd: (side: "front" | "back") => void;
+    onShift: LayerEdits["shift"];
+    onPlace: LayerEdits["place"];
   };
 }
 
@@ -36,6 +39,16 @@ export const StackCut = memo(
 function CutDrawing({ draft, panel, limits, edit }: Props) {
   const layers = stackCutLayers(draft, edit?.selected ?? null);
   const partAt = (index: number) => layers[index]?.part ?? "silicon";
+  // Above the silicon a film comes to lie on the device side, below it on the back.
+  const place = ({ from, before }: { from: number; before: number }) => {
+    const [film, silicon] = [partAt(from), layers.findIndex(({ part }) => part === "silicon")];
+    if (film === "silicon") return;
+    edit?.onPlace(film, before <= silicon ? { before, side: "front" } : { before: before - 1, side: "back" });
+  };
+  const shift = (index: number, by: 1 | -1) => {
+    const film = partAt(index);
+    return film !== "silicon" && edit !== undefined && edit.onShift(film, by);
+  };
   return (
     <Cut
       layers={layers.map(({ layer }) => layer)}
@@ -50,6 +63,8 @@ function CutDrawing({ draft, panel, limits, edit }: Props) {
       }}
       hrefFor={edit && ((index) => edit.hrefFor(partAt(index)))}
       onSelect={edit && ((index) => edit.onSelect(partAt(index)))}
+      onShift={edit && shift}
+      onMove={edit && place}
       showKey
       shape={panel ? freeShape(panel, limits) : undefined}
     />

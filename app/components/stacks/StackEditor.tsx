@@ -1,48 +1,77 @@
 import { getFormProps, type SubmissionResult } from "@conform-to/react";
-import { useCallback, useDeferredValue, useState } from "react";
+import { lazy, Suspense, useCallback, useDeferredValue, useMemo, useState } from "react";
 import { Form } from "react-router";
 import { FormHead } from "#app/components/forms/FormHead.tsx";
-import { NoteField } from "#app/components/forms/NoteField.tsx";
-import { useRecordForm } from "#app/components/forms/use-record-form.ts";
-import type { StackAround } from "#app/lib/stack-around.ts";
-import type { DraftFault } from "#app/lib/stack-draft.ts";
-import { panelRequests, type StackPanel } from "#app/lib/stack-panel.ts";
-import { saysTheSame, stackText, type StackText } from "#app/lib/stack-text.ts";
-import { viewTemperature } from "#app/lib/stack-view.ts";
-import { insertion, LayerList } from "./LayerList.tsx";
-import type { Status } from "./PanelStatus.tsx";
-import { SourceFields } from "./SourceFields.tsx";
-import { StackAnswer } from "./StackAnswer.tsx";
-import type { CutPartOf } from "./stack-cut-layers.ts";
-import { StackCut } from "./StackCut.tsx";
-import { StackFindings } from "./StackFindings.tsx";
-import { StackHeadFields } from "./StackHeadFields.tsx";
-import { StackPanes } from "./StackPanes.tsx";
 import { UnsavedGuard } from "#app/components/forms/UnsavedGuard.tsx";
+import { useRecordForm } from "#app/components/forms/use-record-form.ts";
+import { useInBrowser } from "#app/components/ui/use-in-browser.ts";
+import type { KeptDraft } from "#app/lib/drafts.ts";
+import type { StackAround } from "#app/lib/stack-around.ts";
+import type { StackConflict as Conflict } from "#app/lib/stack-conflict.ts";
+import type { DraftFault } from "#app/lib/stack-draft.ts";
+import type { Direction } from "#app/lib/stack-history.ts";
+import { panelRequests, type StackPanel } from "#app/lib/stack-panel.ts";
+import { filmOf } from "#app/lib/stack-put-back.ts";
+import { stackText, type StackText } from "#app/lib/stack-text.ts";
+import { viewTemperature } from "#app/lib/stack-view.ts";
+import { putInto } from "./put-into.ts";
+import { statusOf } from "./status-of.ts";
+import { StackAnswer } from "./StackAnswer.tsx";
+import { StackBuild } from "./StackBuild.tsx";
+import { StackFindings } from "./StackFindings.tsx";
+import { focusField, STACK_FORM } from "./stack-fields.ts";
+import { StackPanes } from "./StackPanes.tsx";
+import type { CutPartOf } from "./stack-cut-layers.ts";
+import { useKeptDraft } from "./use-kept-draft.ts";
+import { useLayerEdits } from "./use-layer-edits.ts";
 import { useLiveEstimate } from "./use-live-estimate.ts";
-import { useStackDraft } from "./use-stack-draft.ts";
 import { useSelectedLayer } from "./use-selected-layer.ts";
+import { useStackDraft } from "./use-stack-draft.ts";
+import { useStackHistory } from "./use-stack-history.ts";
+import { isText, useUndoKeys } from "./use-undo-keys.ts";
 import { ViewOptions } from "./ViewOptions.tsx";
 
-/** Id of the form, so that buttons elsewhere on the page can send it. */
-export const STACK_FORM = "stack";
+// What few visits need comes when it is needed.
+const StackConflict = lazy(() => import("./StackConflict.tsx").then((module) => ({ default: module.StackConflict })));
+const DraftOffer = lazy(() => import("./DraftOffer.tsx").then((module) => ({ default: module.DraftOffer })));
+const FilmDialog = lazy(() => import("./FilmDialog.tsx").then((module) => ({ default: module.FilmDialog })));
+const differences = () => import("#app/lib/stack-differences.ts");
 
 interface Props extends StackAround {
+  /** id of the stack; null for a new one */
+  stackId: string | null;
   text: StackText;
   panel: StackPanel | null;
   /** null for a new stack */
   version: number | null;
   /** where a new stack may go; null for a stored one */
   programs: readonly { id: string; name: string }[] | null;
+  /** id of who edits, so that what is kept in this browser is told apart */
+  person: string;
   lastResult: SubmissionResult<string[]> | null | undefined;
+  conflict: Conflict | null | undefined;
+  /** whether it has just been saved */
+  saved: boolean;
 }
+
+const textOf = (said: string) => stackText(JSON.parse(said));
 
 /** A stack being built, with what follows from it beside it, live. */
 export function StackEditor(props: Props) {
-  const { text, version, programs, lastResult, choices, limits, view, overlay, others } = props;
-  const [form, fields] = useRecordForm<StackText>({ id: STACK_FORM, lastResult, defaultValue: text });
+  const { stackId, programs, lastResult, choices, limits, view, overlay, others, person, saved } = props;
+  // What is typed belongs to the stack as it was opened, whatever the page's data say later.
+  const [basis, setBasis] = useState({ text: props.text, version: props.version });
+  const [settled, setSettled] = useState<Conflict | null>(null);
+  const conflict = props.conflict && props.conflict !== settled ? props.conflict : null;
+  const [form, fields] = useRecordForm<StackText>({ id: STACK_FORM, lastResult, defaultValue: basis.text });
   const typed = stackText(form.value);
-  const draft = useStackDraft(JSON.stringify(typed), choices);
+  const said = JSON.stringify(typed);
+  const opened = useMemo(() => JSON.stringify(stackText(basis.text)), [basis]);
+  const draft = useStackDraft(said, choices);
+  const history = useStackHistory(said);
+  const kept = useKeptDraft({ person, record: stackId ?? "new", version: basis.version, opened, said, saved });
+  const [words, setWords] = useState("");
+  const [filmFor, setFilmFor] = useState<number | null>(null);
   const [at, setAt] = useState(view.at);
   const { temperature, read } = viewTemperature(at);
   const live = useLiveEstimate(panelRequests(draft, temperature), props.panel, limits);
@@ -51,128 +80,156 @@ export function StackEditor(props: Props) {
   const focusPart = useCallback((part: CutPartOf) => {
     focusField(part === "silicon" ? "siliconThickness.value" : `layers[${part}].film`);
   }, []);
-  const layers = fields.layers.getFieldList();
-  const { part, select } = useSelectedLayer(
-    layers.map(({ key }) => key ?? ""),
+  const selection = useSelectedLayer(
+    fields.layers.getFieldList().map(({ key }) => key ?? ""),
     focusPart,
   );
+  const edits = useLayerEdits({
+    form,
+    text: typed,
+    names: draft.layers.map(({ name }) => name),
+    select: selection.select,
+    expect: selection.expect,
+    settle: history.settle,
+    announce: setWords,
+    typeFilm: setFilmFor,
+  });
+
+  const onStep = (direction: Direction, focus: boolean) => {
+    const to = history.take(direction);
+    if (to === null) return;
+    putInto(form, [typed, textOf(to)], selection, focus);
+    const done = direction === "undo" ? "Taken back" : "Done again";
+    void differences().then(({ stackDifferences, changeWords }) =>
+      setWords(`${done}. ${changeWords(stackDifferences(typed, textOf(to), choices))}`),
+    );
+  };
+  useUndoKeys((direction) => onStep(direction, true), history.unnoted);
+  const replace = (by: StackText, on: typeof basis, what: string) => {
+    history.settle();
+    setBasis(on);
+    putInto(form, [typed, stackText(by)], selection, true);
+    setWords(what);
+  };
+  const takeDraft = (found: KeptDraft) => {
+    kept.settle(found);
+    replace(textOf(found.said), { text: textOf(found.opened), version: found.version }, "The draft is taken up");
+  };
+  const takeTheirs = ({ by, theirs, version }: Conflict) => {
+    setSettled(props.conflict ?? null);
+    replace(theirs, { text: theirs, version }, `The stack is as ${by} saved it`);
+  };
   const goTo = ({ field }: DraftFault) => {
-    const index = /^layers\[(\d+)\]/.exec(field)?.[1];
-    if (index !== undefined) select(Number(index));
-    // The layer opens with the next paint; a field in a folded part can't take the focus before.
+    const film = filmOf(field);
+    if (film !== null) edits.select(film);
     requestAnimationFrame(() => focusField(field));
   };
+  const inBrowser = useInBrowser();
+  const [found] = lastResult ? [] : kept.offered;
   return (
-    <Form method="post" {...getFormProps(form)}>
-      <UnsavedGuard dirty={!saysTheSame(typed, text)} />
-      <FormHead lastResult={lastResult} />
-      {version !== null && <input type="hidden" name="version" value={version} />}
-      {programs === null && <input type="hidden" name="program" value={text.program} />}
-      <StackPanes
-        build={
-          <>
-            <StackHeadFields fields={fields} programs={programs} silicon={choices.silicon} draft={draft} />
-            <div className="@container border-b border-line">
-              <div className="grid grid-cols-[minmax(0,1fr)] @min-[700px]:grid-cols-[464px_minmax(0,1fr)]">
-                <div className="p-4 tablet:px-0">
-                  <StackCut
-                    draft={drawn}
-                    panel={panel}
-                    limits={limits}
-                    edit={{
-                      selected: part,
-                      hrefFor: (of) => (of === "silicon" ? `#${fieldId("siliconThickness.value")}` : `#layer-${of}`),
-                      onSelect: (of) => {
-                        select(of);
-                        if (of === "silicon") focusPart(of);
-                      },
-                      onAdd: (side) => form.insert(insertion(fields.layers.name, side, layers.length)),
+    <>
+      {filmFor !== null && (
+        <Suspense>
+          <FilmDialog
+            thickness={typed.layers[filmFor]?.thickness.value ?? ""}
+            onAdded={(film) => {
+              setFilmFor(null);
+              edits.putFilm(filmFor, film);
+            }}
+            onClose={() => setFilmFor(null)}
+          />
+        </Suspense>
+      )}
+      <Form
+        method="post"
+        {...getFormProps(form)}
+        onInput={({ target }) => isText(target) && history.type()}
+        onBlur={({ target }) => isText(target) && history.settle()}
+      >
+        <UnsavedGuard
+          dirty={said !== opened}
+          stands="What you changed here is not saved yet. This browser keeps it as a draft until you sign out."
+        />
+        <Suspense>
+          {conflict ? (
+            <StackConflict
+              conflict={conflict}
+              mine={typed}
+              opened={conflict.version === basis.version ? null : basis.text}
+              names={choices}
+              address={`/stacks/${stackId ?? ""}`}
+              onTakeTheirs={() => takeTheirs(conflict)}
+            />
+          ) : (
+            <FormHead lastResult={lastResult === null || props.conflict ? null : lastResult} />
+          )}
+          {found && (
+            <DraftOffer
+              draft={found}
+              version={basis.version}
+              more={kept.offered.length - 1}
+              onTake={() => takeDraft(found)}
+              onForget={() => kept.settle(found)}
+            />
+          )}
+        </Suspense>
+        {basis.version !== null && <input type="hidden" name="version" value={conflict?.version ?? basis.version} />}
+        {programs === null && <input type="hidden" name="program" value={basis.text.program} />}
+        <StackPanes
+          build={
+            <StackBuild
+              form={form}
+              fields={fields}
+              programs={programs}
+              choices={choices}
+              draft={draft}
+              drawn={drawn}
+              panel={panel}
+              limits={limits}
+              part={selection.part}
+              focusPart={focusPart}
+              edits={edits}
+              bar={
+                inBrowser && {
+                  ways: { undo: history.undoTo !== null, redo: history.redoTo !== null },
+                  onStep: (direction) => onStep(direction, false),
+                  keptAt: kept.keptAt,
+                  said: words,
+                }
+              }
+            />
+          }
+          answer={<StackAnswer panel={live.panel} limits={limits} status={statusOf(draft.faults, live, goTo)} />}
+          findings={
+            <StackFindings
+              name={typed.name || "New stack"}
+              draft={drawn}
+              panel={panel}
+              overlay={overlay}
+              limits={limits}
+              options={
+                <>
+                  <ViewOptions
+                    view={view}
+                    others={others}
+                    typed={{
+                      at,
+                      understood: read?.ok ? read.understood : undefined,
+                      fault: read && !read.ok ? read.message : undefined,
+                      onType: setAt,
                     }}
                   />
-                </div>
-                <div className="border-line @max-[700px]:border-t @min-[700px]:border-l">
-                  <LayerList
-                    form={form}
-                    field={fields.layers}
-                    draft={draft}
-                    films={choices.films}
-                    selected={part === "silicon" ? null : part}
-                    onSelect={select}
-                  />
-                </div>
-              </div>
-            </div>
-            <details className="px-4 py-3 tablet:px-5" open={fields.note.errors ? true : undefined}>
-              <summary className="link w-fit cursor-pointer text-label">
-                Note, and source of the silicon thickness
-              </summary>
-              <div className="mt-2 grid gap-3 tablet:grid-cols-2">
-                <SourceFields parts={fields.siliconThickness.getFieldset()} of="silicon thickness" />
-                <div className="col-span-full">
-                  <NoteField field={fields.note} label="Note" />
-                </div>
-              </div>
-            </details>
-          </>
-        }
-        answer={<StackAnswer panel={live.panel} limits={limits} status={statusOf(draft.faults, live, goTo)} />}
-        findings={
-          <StackFindings
-            name={typed.name || "New stack"}
-            draft={drawn}
-            panel={panel}
-            overlay={overlay}
-            limits={limits}
-            options={
-              <>
-                <ViewOptions
-                  view={view}
-                  others={others}
-                  typed={{
-                    at,
-                    understood: read?.ok ? read.understood : undefined,
-                    fault: read && !read.ok ? read.message : undefined,
-                    onType: setAt,
-                  }}
-                />
-                <noscript>
-                  <button type="submit" name="intent" value="estimate" className="btn mb-3">
-                    Work it out without saving
-                  </button>
-                </noscript>
-              </>
-            }
-          />
-        }
-      />
-    </Form>
+                  <noscript>
+                    <button type="submit" name="intent" value="estimate" className="btn mb-3">
+                      Work it out without saving
+                    </button>
+                  </noscript>
+                </>
+              }
+            />
+          }
+        />
+      </Form>
+    </>
   );
-}
-
-/** The id that conform gives a field of this form. */
-const fieldId = (name: string) => `${STACK_FORM}-${name}`;
-
-function focusField(name: string) {
-  const field = document.getElementById(fieldId(name));
-  const folded = field?.closest("details");
-  if (folded) folded.open = true;
-  field?.focus();
-}
-
-function statusOf(
-  faults: readonly DraftFault[],
-  live: ReturnType<typeof useLiveEstimate>,
-  goTo: (fault: DraftFault) => void,
-): Status {
-  const [first] = faults;
-  if (first)
-    return {
-      kind: "waiting",
-      what: first.what,
-      more: faults.length - 1,
-      fieldId: fieldId(first.field),
-      goTo: () => goTo(first),
-    };
-  if (live.problem) return { kind: "problem", ...live.problem };
-  return live.stale ? { kind: "asking" } : { kind: "current" };
 }

@@ -1,4 +1,5 @@
-import { useMemo, type ReactNode } from "react";
+import { lazy, Suspense, useMemo, type ReactNode } from "react";
+import { useInBrowser } from "#app/components/ui/use-in-browser.ts";
 import type { SiteLimits } from "#app/engine/rules/limits.ts";
 import type { ChartOthers } from "#app/lib/stack-chart.ts";
 import type { StackDraft } from "#app/lib/stack-draft.ts";
@@ -6,9 +7,12 @@ import { turnFront } from "#app/lib/stack-order.ts";
 import type { StackPanel } from "#app/lib/stack-panel.ts";
 import { AssumedInputs } from "./AssumedInputs.tsx";
 import { BowModels } from "./BowModels.tsx";
+import { FilmForces } from "./FilmForces.tsx";
 import { StackChart } from "./StackChart.tsx";
 import { StackWorkings } from "./StackWorkings.tsx";
-import { WarpSpread } from "./WarpSpread.tsx";
+
+// Only scripts draw wafers.
+const WarpSpread = lazy(() => import("./WarpSpread.tsx").then((module) => ({ default: module.WarpSpread })));
 
 interface Props {
   name: string;
@@ -21,13 +25,19 @@ interface Props {
 
 /** What follows from the stack besides the answer: the curve, the models side by side, what is assumed, the calculations. */
 export function StackFindings({ name, draft, panel, overlay, limits, options }: Props) {
+  const inBrowser = useInBrowser();
   const names = useMemo(() => turnFront(draft.layers).map((layer) => layer.name), [draft]);
   if (!panel) return <div className="border-t border-line px-4 py-4 tablet:px-6">{options}</div>;
   return (
     <>
       <StackChart name={name} panel={panel} overlay={overlay} limits={limits} options={options} />
+      <FilmForces estimated={panel.room} names={names} />
       <BowModels estimated={panel.room} />
-      <WarpSpread estimated={panel.room} />
+      {inBrowser && (
+        <Suspense>
+          <WarpSpread estimated={panel.room} />
+        </Suspense>
+      )}
       <AssumedInputs draft={draft} />
       <StackWorkings estimated={panel.room} names={names} />
     </>

@@ -1,4 +1,5 @@
 import type { FieldMetadata } from "@conform-to/react";
+import { memo } from "react";
 import { ChoiceField } from "#app/components/forms/ChoiceField.tsx";
 import { LineField } from "#app/components/forms/LineField.tsx";
 import type { MeasuredText } from "#app/components/forms/MeasuredField.tsx";
@@ -20,10 +21,26 @@ interface Props {
   programs: readonly { id: string; name: string }[] | null;
   silicon: readonly SiliconChoice[];
   draft: StackDraft;
+  /** the same while nothing of them has changed, their errors included */
+  stamp: string;
 }
 
-/** Name, program and silicon: the top of the left pane. */
-export function StackHeadFields({ fields, programs, silicon, draft }: Props) {
+/** Name, program and silicon: the top of the left pane. A key typed into a film leaves them as they are. */
+export const StackHeadFields = memo(
+  HeadFields,
+  (before, after) =>
+    before.stamp === after.stamp && before.programs === after.programs && before.silicon === after.silicon,
+);
+
+/** What the stamp of the head fields is made of. */
+export const headStamp = ({ name, program, silicon, siliconThickness }: Props["fields"], draft: StackDraft): string =>
+  JSON.stringify([
+    [name, program, silicon, siliconThickness].map(({ key, value, allErrors }) => [key, value, allErrors]),
+    draft.silicon,
+    draft.remarks,
+  ]);
+
+function HeadFields({ fields, programs, silicon, draft }: Props) {
   const thickness = fields.siliconThickness.getFieldset();
   const bought = draft.silicon ? `As bought ${thicknessWords(draft.silicon.thickness)}` : undefined;
   return (

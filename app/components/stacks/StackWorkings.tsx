@@ -1,7 +1,11 @@
-import { memo, useState, type ReactNode } from "react";
-import { WorkingView } from "#app/components/working/WorkingView.tsx";
+import { lazy, memo, Suspense, useState, type ReactNode } from "react";
 import type { Estimated } from "#app/lib/stack-words.ts";
 import { useWorkings, type Workings } from "./use-workings.ts";
+
+// Without scripts the server writes them; with scripts their drawing is taken over once it has come.
+const WorkingView = lazy(() =>
+  import("#app/components/working/WorkingView.tsx").then((module) => ({ default: module.WorkingView })),
+);
 
 interface Props {
   estimated: Estimated;
@@ -18,7 +22,7 @@ export const StackWorkings = memo(function StackWorkings({ estimated, names }: P
       <summary className="link w-fit cursor-pointer">{words}</summary>
       <div className="mt-2 mb-4">
         {workings ? (
-          of(workings)
+          <Suspense>{of(workings)}</Suspense>
         ) : (
           <p className={failed ? "text-stop" : "text-quiet"} role="status">
             {failed ? "The workings did not load. Save the stack to see them." : "Working it out"}

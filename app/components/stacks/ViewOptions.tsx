@@ -1,4 +1,4 @@
-import { useState, type KeyboardEvent } from "react";
+import { memo, useState, type KeyboardEvent } from "react";
 import { useSearchParams } from "react-router";
 import { SelectField } from "#app/components/ui/SelectField.tsx";
 import { TextField } from "#app/components/ui/TextField.tsx";
@@ -12,8 +12,19 @@ interface Props {
   typed: { at: string; understood: string | undefined; fault: string | undefined; onType: (at: string) => void };
 }
 
+/** A list of stacks may be long, and a key typed into a film says nothing of it. */
+export const ViewOptions = memo(
+  Options,
+  ({ typed: before, ...one }, { typed: after, ...other }) =>
+    one.view === other.view &&
+    one.others === other.others &&
+    before.at === after.at &&
+    before.understood === after.understood &&
+    before.fault === after.fault,
+);
+
 /** At which other temperature the shape is asked, and which other stack is laid over: both in the address. */
-export function ViewOptions({ view, others, typed }: Props) {
+function Options({ view, others, typed }: Props) {
   const [, setSearch] = useSearchParams();
   const [laidOver, setLaidOver] = useState({ value: view.with, of: view.with });
   if (laidOver.of !== view.with) setLaidOver({ value: view.with, of: view.with });

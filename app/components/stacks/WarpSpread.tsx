@@ -2,7 +2,6 @@ import { useId, useState, type KeyboardEvent } from "react";
 import { noBreak } from "#app/components/drawings/no-break.ts";
 import { RunProgress } from "#app/components/ui/RunProgress.tsx";
 import { TextField } from "#app/components/ui/TextField.tsx";
-import { useInBrowser } from "#app/components/ui/use-in-browser.ts";
 import { readQuantity } from "#app/lib/read-quantity.ts";
 import { stackOf } from "#app/lib/stack-of-request.ts";
 import { spreadSentences, type Estimated } from "#app/lib/stack-words.ts";
@@ -13,11 +12,9 @@ const FIRST_LIMIT = "400 µm";
 
 /** How many wafers with this stack would exceed a warp, by drawing wafers within the tolerances given. */
 export function WarpSpread({ estimated: { request, answer } }: { estimated: Estimated }) {
-  const scripts = useInBrowser();
   const id = useId();
   const [typed, setTyped] = useState(FIRST_LIMIT);
   const { state, key: asked, start, stop } = useWarpSampling();
-  if (!scripts) return null;
   const limit = readQuantity(typed, RULES.warpLimit);
   const key = JSON.stringify([request, typed]);
   const why = whyNot(answer.shape);

@@ -7,7 +7,7 @@ import type { Estimated } from "#app/lib/stack-words.ts";
 /** How long nothing may be typed before it is computed, ms. */
 const PAUSE = 120;
 
-/** The engine comes after the page, and only to pages that compute. */
+/** The engine comes after the page, and only to who types. */
 const engine = () => import("#app/lib/live-panel.ts");
 
 const BROKEN = "It could not be worked out here; nothing that you typed is lost.";
@@ -37,8 +37,10 @@ export function useLiveEstimate(wanted: PanelRequests | null, served: StackPanel
   const failed = failure !== null && failure.key === key;
   const ask = key !== null && key !== shown && !failed ? key : null;
   useEffect(() => {
-    // So that it is there before it is needed; whether it came shows when it is.
-    engine().catch(() => undefined);
+    // With the first look into a field, so that it is there before it is needed; whether it came shows when it is.
+    const fetchEngine = () => void engine().catch(() => undefined);
+    document.addEventListener("focusin", fetchEngine, { once: true });
+    return () => document.removeEventListener("focusin", fetchEngine);
   }, []);
   useEffect(() => {
     if (ask === null) return undefined;

@@ -11,10 +11,13 @@ export function useSelectedLayer(keys: readonly string[], focus: (part: CutPartO
   const [known, setKnown] = useState(keys);
   const [selected, setSelected] = useState<string | null>(keys[0] ?? null);
   const [arrived, setArrived] = useState<string | null>(null);
+  const [expected, setExpected] = useState<number | null>(null);
   if (keys.length !== known.length || keys.some((key, index) => key !== known[index])) {
     setKnown(keys);
+    setExpected(null);
     const added = keys.find((key) => !known.includes(key));
-    if (added !== undefined && keys.length > known.length) {
+    if (expected !== null) setSelected(keys[expected] ?? keys.at(-1) ?? null);
+    else if (added !== undefined && keys.length > known.length) {
       setSelected(added);
       setArrived(added);
     } else if (selected !== null && !keys.includes(selected)) {
@@ -31,6 +34,11 @@ export function useSelectedLayer(keys: readonly string[], focus: (part: CutPartO
     focused.current = arrived;
     focus(part);
   }, [arrived, part, focus]);
-  const select = (next: CutPartOf) => setSelected(next === "silicon" ? null : (keys[next] ?? null));
-  return { part, select };
+  const select = (next: CutPartOf) => {
+    setExpected(null);
+    setSelected(next === "silicon" ? null : (keys[next] ?? null));
+  };
+  /** Says which film is the selected one once the list, which is about to change, has changed; the focus stays with who asked. */
+  const expect = (next: number) => setExpected(next);
+  return { part, select, expect };
 }

@@ -34,7 +34,12 @@ export interface StackEstimate {
   shape: FreeWaferShape;
   disc: StackDisc;
   /** σ·h·coverage of each side at the temperature, N/m, tension positive; of lines the mean of along and across */
-  filmForce: { front: number; back: number };
+  filmForce: {
+    front: number;
+    back: number;
+    /** of each film, in the order of the stack's */
+    films: number[];
+  };
 }
 
 /** The laminate of a stack whose directions differ. */
@@ -61,12 +66,9 @@ export function blanketStress(film: StackFilm, temperature: number): number {
 export function estimateStack(stack: StackInput): StackEstimate {
   const radius = stack.wafer.diameter / 2;
   const { laminate, unequal, disc } = freeDisc(stack);
-  const force = { front: 0, back: 0 };
   const pulling = atItsTemperature(stack);
-  for (const film of pulling.films) {
-    const { x, y } = pullOf(film);
-    force[film.side] += (x + y) / 2;
-  }
+  const force = { front: 0, back: 0, films: pulling.films.map(meanPull) };
+  pulling.films.forEach(({ side }, index) => (force[side] += force.films[index] ?? 0));
   const curvature = thinFilmCurvature(pulling);
   const steepest = unequal?.principal.major ?? laminate.curvature;
   return {
@@ -93,6 +95,11 @@ export function pullOf(film: StackFilm): PlaneTensor {
   if (lines) return patternedFilm(patternedOf(film, lines)).force;
   const both = filmForce({ stress, thickness, coverage });
   return { x: both, y: both, xy: 0 };
+}
+
+function meanPull(film: StackFilm): number {
+  const { x, y } = pullOf(film);
+  return (x + y) / 2;
 }
 
 /** A film in lines as the functions of patterned films take it. */

@@ -24,6 +24,7 @@ const SCHEMAS: Record<LibraryKey, z.ZodType<{ name: string }>> = {
 
 /**
  * Saves a posted record of the library: a new one when `id` is null. Once saved, leads to the record, below the address `list`;
+ * or, with `stay`, is told its id, for a form beside another one;
  * otherwise everything typed goes back with what is wrong (400) or with who was faster or has the name already (409).
  * @throws 403 for a role that may not edit this kind, 404 when the id names nothing
  */
@@ -31,16 +32,18 @@ export async function saveLibraryForm(
   request: Request,
   scope: ActorScope,
   key: LibraryKey,
-  { id, list }: { id: string | null; list: string },
+  { id, list, stay = false }: { id: string | null; list: string; stay?: boolean },
 ) {
   const { what, edit } = LIBRARY[key];
   requireOnSite(scope, edit);
   const { formData, submission } = await readForm(request, SCHEMAS[key]);
   const version = versionOf(formData);
   // What was read with an older version stays of that version until the person has been told of the newer one.
-  if (submission.status !== "success") return data({ ...refusal(submission, null, what), version }, { status: 400 });
+  if (submission.status !== "success")
+    return data({ ...refusal(submission, null, what), version, savedAs: null }, { status: 400 });
   const saved = await saveLibraryRecord(scope, key, { id, version, values: submission.value });
+  if (saved.outcome === "saved" && stay) return data({ lastResult: null, version: null, savedAs: saved.id });
   if (saved.outcome === "saved") throw redirect(`${list}/${saved.id}`);
   const answer = refusal(submission, saved, what);
-  return data({ ...answer, version: answer.version ?? version }, { status: 409 });
+  return data({ ...answer, version: answer.version ?? version, savedAs: null }, { status: 409 });
 }

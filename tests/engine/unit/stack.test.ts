@@ -37,7 +37,7 @@ describe("estimateStack", () => {
   it("gives a bare wafer no bow, no force and no load", () => {
     const { stoney, laminate, shape, filmForce } = estimateStack(stackOf([]));
     expect([stoney.sagitta, laminate.sagitta, shape.warp, shape.stabilityRatio]).toEqual([0, 0, 0, 0]);
-    expect(filmForce).toEqual({ front: 0, back: 0 });
+    expect(filmForce).toEqual({ front: 0, back: 0, films: [] });
   });
 
   it("adds the forces of each side, covered area counted", () => {
@@ -45,6 +45,9 @@ describe("estimateStack", () => {
     const { filmForce } = estimateStack(stackOf([COPPER, { ...COPPER, thickness: 2e-6 }, back]));
     expect(relative(filmForce.front, 7e-6 * 200e6 * 0.35)).toBeLessThan(1e-12);
     expect(relative(filmForce.back, 200)).toBeLessThan(1e-12);
+    expect(filmForce.films).toHaveLength(3);
+    expect(relative((filmForce.films[0] ?? 0) + (filmForce.films[1] ?? 0), filmForce.front)).toBeLessThan(1e-12);
+    expect(filmForce.films[2]).toBe(filmForce.back);
   });
 
   it("lets Stoney and the laminate agree on a thin film at another temperature as well", () => {

@@ -12,8 +12,10 @@ export function loader({ context }: Route.LoaderArgs) {
   return null;
 }
 
-export async function action({ request, context }: Route.ActionArgs) {
-  return saveLibraryForm(request, scopeOf(context), "film", { id: null, list: "/films" });
+/** With `?stay` the form of a film stands beside something else, which it must not lead away from. */
+export async function action({ request, context, url }: Route.ActionArgs) {
+  const stay = url.searchParams.has("stay");
+  return saveLibraryForm(request, scopeOf(context), "film", { id: null, list: "/films", stay });
 }
 
 export default function NewFilm({ actionData }: Route.ComponentProps) {

@@ -1,7 +1,9 @@
 import { redirect } from "react-router";
 import { SubmitButton } from "#app/components/forms/SubmitButton.tsx";
 import { PageHead } from "#app/components/layout/PageHead.tsx";
-import { STACK_FORM, StackEditor } from "#app/components/stacks/StackEditor.tsx";
+import { STACK_FORM } from "#app/components/stacks/stack-fields.ts";
+import { StackEditor } from "#app/components/stacks/StackEditor.tsx";
+import { useOwnSave } from "#app/components/stacks/use-own-save.ts";
 import { scopeOf } from "#app/server/contexts.server.ts";
 import { newStackPage } from "#app/services/stack-page.server.ts";
 import { postedStack } from "./stack-form.server.ts";
@@ -20,6 +22,7 @@ export async function action({ request, context }: Route.ActionArgs) {
 }
 
 export default function NewStack({ loaderData, actionData }: Route.ComponentProps) {
+  const { saved } = useOwnSave(actionData?.lastResult);
   return (
     <>
       <PageHead
@@ -31,7 +34,15 @@ export default function NewStack({ loaderData, actionData }: Route.ComponentProp
           </SubmitButton>
         }
       />
-      <StackEditor {...loaderData} {...actionData} version={null} lastResult={actionData?.lastResult} />
+      <StackEditor
+        {...loaderData}
+        {...actionData}
+        stackId={null}
+        version={null}
+        lastResult={actionData?.lastResult}
+        conflict={null}
+        saved={saved}
+      />
     </>
   );
 }

@@ -2,7 +2,7 @@ import { data, redirect } from "react-router";
 import { stackSchema } from "#app/schemas/stack.ts";
 import { readForm, refusal, versionOf } from "#app/server/form.server.ts";
 import type { ActorScope } from "#app/server/scope.server.ts";
-import { typedStack } from "#app/services/stack-page.server.ts";
+import { stackConflict, typedStack } from "#app/services/stack-page.server.ts";
 import { removeStack, saveStack } from "#app/services/stacks.server.ts";
 
 /**
@@ -19,11 +19,25 @@ export async function postedStack(scope: ActorScope, request: Request, id: strin
   const typed = () => typedStack(scope, formData, submission.payload, id);
   if (submission.status === undefined || formData.get("intent") === "estimate")
     return {
-      again: data({ lastResult: { ...submission.reply(), error: undefined }, version: null, ...(await typed()) }),
+      again: data({
+        lastResult: { ...submission.reply(), error: undefined },
+        version: null,
+        conflict: null,
+        ...(await typed()),
+      }),
     };
   if (submission.status !== "success")
-    return { again: data({ ...refusal(submission, null, "stack"), ...(await typed()) }, { status: 400 }) };
+    return {
+      again: data({ ...refusal(submission, null, "stack"), conflict: null, ...(await typed()) }, { status: 400 }),
+    };
   const saved = await saveStack(scope, { id, version: versionOf(formData), values: submission.value });
   if (saved.outcome === "saved") return { savedAs: saved.id };
-  return { again: data({ ...refusal(submission, saved, "stack"), ...(await typed()) }, { status: 409 }) };
+  const conflict = saved.outcome === "conflict" && id !== null ? await stackConflict(scope, id) : null;
+  const answer = refusal(submission, saved, "stack");
+  return {
+    again: data(
+      { ...answer, version: conflict?.version ?? answer.version, conflict, ...(await typed()) },
+      { status: 409 },
+    ),
+  };
 }

@@ -2,8 +2,10 @@ import { Link, redirect } from "react-router";
 import { SubmitButton } from "#app/components/forms/SubmitButton.tsx";
 import { PageHead } from "#app/components/layout/PageHead.tsx";
 import { RemoveStack } from "#app/components/stacks/RemoveStack.tsx";
-import { STACK_FORM, StackEditor } from "#app/components/stacks/StackEditor.tsx";
+import { STACK_FORM } from "#app/components/stacks/stack-fields.ts";
+import { StackEditor } from "#app/components/stacks/StackEditor.tsx";
 import { StackReading } from "#app/components/stacks/StackReading.tsx";
+import { useOwnSave } from "#app/components/stacks/use-own-save.ts";
 import { scopeOf } from "#app/server/contexts.server.ts";
 import { stackPage } from "#app/services/stack-page.server.ts";
 import { idFrom } from "#app/services/uuid.server.ts";
@@ -29,6 +31,7 @@ export async function action({ request, context, params, url }: Route.ActionArgs
 export default function Stack({ loaderData, actionData }: Route.ComponentProps) {
   const { stack, ...page } = loaderData;
   const { id, name, program, stamp, mayEdit } = stack;
+  const { saved, saves } = useOwnSave(actionData?.lastResult);
   return (
     <>
       <PageHead
@@ -58,12 +61,15 @@ export default function Stack({ loaderData, actionData }: Route.ComponentProps) 
       />
       {mayEdit ? (
         <StackEditor
-          key={`${id} ${stamp.version}`}
+          key={`${id} ${saves}`}
           {...page}
           {...actionData}
+          stackId={id}
           version={actionData?.version ?? stamp.version}
           programs={null}
           lastResult={actionData?.lastResult}
+          conflict={actionData?.conflict}
+          saved={saved}
         />
       ) : (
         <StackReading key={id} {...page} />
