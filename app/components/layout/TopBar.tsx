@@ -19,8 +19,12 @@ export function TopBar({ person, places, programs }: Props) {
   const { pathname } = useLocation();
   const mine = useMine();
   const row = useRef<HTMLElement>(null);
+  const begun = useRef(false);
   useEffect(() => {
-    if (row.current) showCurrent(row.current);
+    // A browser that begins at the current place by itself has done so, and the reader may have moved the row since.
+    const shown = !begun.current && CSS.supports("scroll-initial-target", "nearest");
+    begun.current = true;
+    if (row.current && !shown) showCurrent(row.current);
   }, [pathname]);
   return (
     <header className="screen-only mx-auto max-w-page px-4 tablet:px-6">
