@@ -38,6 +38,14 @@ export const SHORTCUTS: readonly { where: string; keys: readonly Shortcut[] }[] 
     ],
   },
   {
+    where: "In the films of a stack",
+    keys: [
+      { keys: ["Alt Up", "Alt Down"], does: "Move the film up or down" },
+      { keys: ["Ctrl Z", "Cmd Z"], does: "Take the last change back" },
+      { keys: ["Ctrl Shift Z", "Cmd Shift Z", "Ctrl Y"], does: "Do it again" },
+    ],
+  },
+  {
     where: "Under a chart",
     keys: [{ keys: ["Left", "Right"], does: "Move the cursor, which reads out the figures where it stands" }],
   },

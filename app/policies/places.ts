@@ -29,6 +29,14 @@ const seesLibrary = (actor: Actor) => mayOnSite(actor, "see the library");
 const WITHIN: (Page & { open: (actor: Actor) => boolean })[] = [
   { name: "Favourites", path: "/favourites", also: "marked, starred", open: seesLibrary },
   { name: "Preferences", path: "/preferences", also: "theme, dark, density, settings", open: () => true },
+  { name: "Compare films", path: "/films/compare", open: seesLibrary },
+  {
+    name: "Import films",
+    path: "/films/import",
+    also: "table, CSV",
+    open: (actor) => mayOnSite(actor, "edit films"),
+  },
+  { name: "Compare stacks", path: "/stacks/compare", also: "overlay", open: seesWork },
   { name: "Carriers", path: "/carriers/carriers", open: seesLibrary },
   { name: "Bonding materials", path: "/carriers/bonding-materials", also: "adhesives", open: seesLibrary },
   { name: "Tapes", path: "/carriers/tapes", open: seesLibrary },
