@@ -51,13 +51,14 @@ export function useCutDrag(places: readonly CutPlace[], onMove: ((drag: CutDrag)
         event.currentTarget.setPointerCapture(event.pointerId);
       }
       dragged.current = true;
-      show({ from, before: placeOf(event, places) });
+      // A quick pointer has left its layer by its first move.
+      show({ from: begun.current.from, before: placeOf(event, places) });
     },
     onPointerUp: () => {
       const dropped = current.current;
       begun.current = null;
       show(null);
-      if (dropped && dropped.before !== from && dropped.before !== from + 1) onMove?.(dropped);
+      if (dropped && dropped.before !== dropped.from && dropped.before !== dropped.from + 1) onMove?.(dropped);
     },
     onPointerCancel: () => {
       begun.current = null;
