@@ -18,13 +18,20 @@ const SLACK = 6;
 export function useCutDrag(places: readonly CutPlace[], onMove: ((drag: CutDrag) => void) | undefined) {
   const [drag, setDrag] = useState<CutDrag | null>(null);
   const begun = useRef<{ from: number; y: number } | null>(null);
+  // A pointer may be let go before what its last move said is drawn.
+  const current = useRef<CutDrag | null>(null);
   const dragged = useRef(false);
+  const show = (next: CutDrag | null) => {
+    current.current = next;
+    setDrag(next);
+  };
   const dragging = drag !== null;
   useEffect(() => {
     if (!dragging) return undefined;
     const letGo = (event: KeyboardEvent) => {
       if (event.key !== "Escape") return;
       begun.current = null;
+      current.current = null;
       setDrag(null);
     };
     window.addEventListener("keydown", letGo);
@@ -36,20 +43,26 @@ export function useCutDrag(places: readonly CutPlace[], onMove: ((drag: CutDrag)
       if (event.button === 0 && event.pointerType !== "touch") begun.current = { from, y: event.clientY };
     },
     onPointerMove: (event: PointerEvent<SVGElement>) => {
-      if (!begun.current || (!drag && Math.abs(event.clientY - begun.current.y) < SLACK)) return;
-      if (!drag) event.currentTarget.setPointerCapture(event.pointerId);
+      // Let go elsewhere, before it was a drag.
+      if (event.buttons === 0) begun.current = null;
+      if (!begun.current) return;
+      if (!current.current) {
+        if (Math.abs(event.clientY - begun.current.y) < SLACK) return;
+        event.currentTarget.setPointerCapture(event.pointerId);
+      }
       dragged.current = true;
-      setDrag({ from, before: placeOf(event, places) });
+      // A quick pointer has left its layer by its first move.
+      show({ from: begun.current.from, before: placeOf(event, places) });
     },
     onPointerUp: () => {
+      const dropped = current.current;
       begun.current = null;
-      if (!drag) return;
-      setDrag(null);
-      if (drag.before !== drag.from && drag.before !== drag.from + 1) onMove?.(drag);
+      show(null);
+      if (dropped && dropped.before !== dropped.from && dropped.before !== dropped.from + 1) onMove?.(dropped);
     },
     onPointerCancel: () => {
       begun.current = null;
-      setDrag(null);
+      show(null);
     },
     // A layer is a link, which a browser would carry off; and letting go of one is no click on it.
     onDragStart: (event: { preventDefault: () => void }) => event.preventDefault(),

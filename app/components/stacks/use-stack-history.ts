@@ -30,5 +30,3 @@ export function useStackHistory(said: string) {
     },
   };
 }
-
-export type StackHistoryState = ReturnType<typeof useStackHistory>;
