@@ -58,6 +58,25 @@ export async function expectNoAxeFindings(page: Page): Promise<void> {
   expect(found).toEqual([]);
 }
 
+/** Has `goto` and `reload` wait until the scripts of the page answer, unless they are told what to wait for. */
+function waitForScripts(page: Page): void {
+  const answering = async () => {
+    const isOurs = await page.evaluate(() => document.querySelector('link[rel="modulepreload"]') !== null);
+    if (isOurs) await page.locator('html[data-scripts="at work"]').waitFor({ state: "attached" });
+  };
+  const [goto, reload] = [page.goto.bind(page), page.reload.bind(page)];
+  page.goto = async (url, options) => {
+    const answer = await goto(url, options);
+    if (options?.waitUntil === undefined) await answering();
+    return answer;
+  };
+  page.reload = async (options) => {
+    const answer = await reload(options);
+    if (options?.waitUntil === undefined) await answering();
+    return answer;
+  };
+}
+
 /** The browser's own remark about an answer that is a refusal on purpose. */
 const REFUSED = /^Failed to load resource: the server responded with a status of (4\d\d)/;
 
@@ -66,6 +85,10 @@ const REFUSED = /^Failed to load resource: the server responded with a status of
  * remark on answers of 400 to 499, for tests that ask for them.
  */
 export const test = base.extend<{ refusals: boolean; watched: void }>({
+  page: async ({ page, javaScriptEnabled }, use) => {
+    if (javaScriptEnabled) waitForScripts(page);
+    await use(page);
+  },
   refusals: [false, { option: true }],
   watched: [
     async ({ page, refusals }, use) => {
