@@ -60,6 +60,8 @@ export const profileFileSchema = fileShape.extend({
   filmThicknessTolerance: scanSchema.shape.filmThicknessTolerance,
   siliconThickness: optionalQuantity(RULES.siliconThickness),
   siliconThicknessTolerance: scanSchema.shape.siliconThicknessTolerance,
+  siliconThicknessFrom: scanSchema.shape.siliconThicknessFrom,
+  sinceCure: scanSchema.shape.sinceCure,
 });
 
 export type TableFileValues = z.output<typeof tableFileSchema>;

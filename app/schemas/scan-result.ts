@@ -14,6 +14,10 @@ export interface ScanParameters extends FileFormat {
   filmThicknessTolerance: number | null;
   siliconThickness: number;
   siliconThicknessTolerance: number | null;
+  /** null where nobody has said, missing from before it was asked */
+  siliconThicknessFrom?: "measured" | "nominal" | null;
+  /** from the end of the film's cure to the scan after it, s; likewise */
+  sinceCure?: number | null;
   diameter: number;
   edgeExclusion: number;
 }

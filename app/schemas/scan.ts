@@ -2,7 +2,11 @@ import { z } from "zod";
 import { DECIMAL_MARKS, LENGTH_UNITS } from "#app/lib/scan-reading/reading.ts";
 import { optionalQuantity, quantity } from "./quantity.ts";
 import { RULES } from "./ranges.ts";
+import { optionalChoice } from "./record-fields.ts";
 import type { FileFormat } from "./scan-result.ts";
+
+/** Where a thickness comes from. */
+export const THICKNESS_FROM = ["measured", "nominal"] as const;
 
 export const scanSchema = z.object({
   program: z.uuid("Choose the program."),
@@ -26,6 +30,14 @@ export const scanSchema = z.object({
   siliconThicknessTolerance: optionalQuantity({
     ...RULES.siliconThickness,
     range: { least: 0, most: 2e-3, words: "0 to 2 mm" },
+  }),
+  /** whether the silicon was measured on this wafer or is as its box says; null where nobody has said */
+  siliconThicknessFrom: optionalChoice(THICKNESS_FROM),
+  /** from the end of the film's cure to the scan after it, s */
+  sinceCure: optionalQuantity({
+    label: "time since the cure",
+    dimension: "time",
+    range: { least: 0, most: 3.2e8, words: "0 to ten years" },
   }),
   diameter: quantity(RULES.diameter),
   edgeExclusion: quantity(RULES.rim),

@@ -14,6 +14,10 @@ export interface WaferScanSubject {
   filmThicknessTolerance: number | null;
   siliconThickness: number | null;
   siliconThicknessTolerance: number | null;
+  /** missing from before it was asked, as is the next */
+  siliconThicknessFrom?: "measured" | "nominal" | null;
+  /** from the end of the film's cure to the scan after it, s */
+  sinceCure?: number | null;
   diameter: number;
   edgeExclusion: number;
   orientation: "100" | "111";

@@ -35,6 +35,8 @@ export const handPairSchema = scanSchema
     filmThicknessTolerance: true,
     siliconThickness: true,
     siliconThicknessTolerance: true,
+    siliconThicknessFrom: true,
+    sinceCure: true,
     diameter: true,
     edgeExclusion: true,
   })

@@ -89,7 +89,7 @@ const params = (query = "") => ({ query, sort: "since", descending: true, page: 
 
 describe("a file of a profile", () => {
   test("waits for its partner, whichever comes first, and makes the scan with it", async () => {
-    const first = await bring("after", 61, { lot: "L-61", slot: 4, filmThickness: 5e-6 });
+    const first = await bring("after", 61, { lot: "L-61", slot: 4, filmThickness: 5e-6, sinceCure: 26 * 3600 });
     expect(onlyPlaced(first)).toMatchObject({ outcome: "waits", label: "W-61, lot L-61, slot 4, 0°" });
     const { listWaiting } = await queue();
     expect((await listWaiting(technician, params("l-61"))).rows).toMatchObject([
@@ -99,7 +99,8 @@ describe("a file of a profile", () => {
     const turned = { wafer: "w-61", lot: "l-61", lines: [{ profile: 0, azimuth: 1 * DEGREE }] };
     const id = scanOf(await bring("before", 61, turned));
     const { getScan } = await scans();
-    const { result, label } = await getScan(technician, id);
+    const { result, label, parameters } = await getScan(technician, id);
+    expect(parameters).toMatchObject({ siliconThicknessFrom: "measured", sinceCure: 26 * 3600 });
     expect(label).toBe("W-61, lot L-61, slot 4, 1°");
     expect(Math.abs(result.stress - 31e6)).toBeLessThan(3 * result.stressUncertainty);
     expect((await listWaiting(technician, params("l-61"))).total).toBe(0);

@@ -21,6 +21,8 @@ export type ScanFormValues = {
   filmThicknessTolerance: string;
   siliconThickness: string;
   siliconThicknessTolerance: string;
+  siliconThicknessFrom: string;
+  sinceCure: string;
   diameter: string;
   edgeExclusion: string;
   positionUnit: string;

@@ -12,7 +12,13 @@ export function ScanInputs({ parameters, placed }: { parameters: ScanParameters;
   const mm = (value: number) => formatQuantity(value, "length", { unit: "mm" });
   const rows = [
     ["Film thickness", thickness(parameters.filmThickness, parameters.filmThicknessTolerance)],
-    ["Silicon thickness", thickness(parameters.siliconThickness, parameters.siliconThicknessTolerance)],
+    [
+      parameters.siliconThicknessFrom ? `Silicon thickness, ${parameters.siliconThicknessFrom}` : "Silicon thickness",
+      thickness(parameters.siliconThickness, parameters.siliconThicknessTolerance),
+    ],
+    ...(typeof parameters.sinceCure === "number"
+      ? [["From cure to scan", formatQuantity(parameters.sinceCure, "time", { unit: "h", significant: 3, trim: true })]]
+      : []),
     ["Diameter", mm(parameters.diameter)],
     ["Orientation", `(${parameters.orientation})`],
     ["Rim left out", mm(parameters.edgeExclusion)],

@@ -7,12 +7,19 @@ const ORIENTATIONS: Choice[] = [
   { value: "111", label: "(111)" },
 ];
 
+const THICKNESSES: Choice[] = [
+  { value: "measured", label: "measured on this wafer" },
+  { value: "nominal", label: "nominal, from its box" },
+];
+
 type Field =
   | "film"
   | "filmThickness"
   | "filmThicknessTolerance"
   | "siliconThickness"
   | "siliconThicknessTolerance"
+  | "siliconThicknessFrom"
+  | "sinceCure"
   | "diameter"
   | "orientation";
 
@@ -70,6 +77,20 @@ export function MeasuredWaferFields({
         label="Tolerance, ±"
         dimension="length"
         hint="Half-width; blank: not known"
+      />
+      <ChoiceField
+        field={fields.siliconThicknessFrom}
+        label="That thickness is"
+        choices={THICKNESSES}
+        blank="Not said"
+        hint="It enters squared"
+      />
+      <QuantityField
+        field={fields.sinceCure}
+        label="From cure to scan"
+        dimension="time"
+        example="26 h"
+        hint="Of a film that cures; it moves for a day"
       />
       <QuantityField field={fields.diameter} label="Diameter" dimension="length" example="200 mm" />
       <ChoiceField field={fields.orientation} label="Orientation of the silicon" choices={ORIENTATIONS} />

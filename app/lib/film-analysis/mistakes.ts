@@ -46,10 +46,14 @@ function checksOf(
 ): ScanChecks {
   const { parameters, film, usedAt, measuredThickness, reduced } = subject;
   const { result, points } = pair;
+  const { sinceCure = null } = parameters;
+  const post = points && scanOf(points.post, pair);
+  // A file names the day at most: without it the clock begins with the scan.
+  const at = post?.at ?? 0;
   const placed = pairs.filter(({ azimuth }) => azimuth !== null);
   return {
     pre: points && scanOf(points.pre, pair),
-    post: points && scanOf(points.post, pair),
+    post: post && (sinceCure === null ? post : { ...post, at }),
     edgeExclusion: parameters.edgeExclusion,
     change: { value: result.curvatureChange, standardUncertainty: changeUncertainty(pair) },
     expectedChange: expectedChange(subject, result.biaxialModulus),
@@ -57,6 +61,7 @@ function checksOf(
     wafer: {
       diameter: parameters.diameter,
       thickness: parameters.siliconThickness,
+      thicknessFrom: parameters.siliconThicknessFrom ?? null,
       measured: measuredThickness,
     },
     expectedModulus: result.biaxialModulus,
@@ -64,6 +69,7 @@ function checksOf(
     film: {
       thickness: parameters.filmThickness,
       usedAt,
+      curedAt: sinceCure === null ? null : at - sinceCure,
       cures: film && film.kind !== "polymer" ? false : null,
     },
     azimuths: readingsOf(placed, "change"),

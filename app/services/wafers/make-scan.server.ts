@@ -28,7 +28,7 @@ interface Meeting {
 }
 
 /** What a scan is computed with. */
-type Complete = WaferScanSubject & { filmThickness: number; siliconThickness: number };
+type Complete = Required<WaferScanSubject> & { filmThickness: number; siliconThickness: number };
 
 /** Diameters that differ by more are of two kinds of wafer. */
 const SAME_DIAMETER = 0.01;
@@ -119,5 +119,7 @@ function complete(label: string, own: WaferScanSubject, other: WaferScanSubject)
     filmThicknessTolerance: from(own.filmThickness).filmThicknessTolerance,
     siliconThickness,
     siliconThicknessTolerance: from(own.siliconThickness).siliconThicknessTolerance,
+    siliconThicknessFrom: from(own.siliconThickness).siliconThicknessFrom ?? null,
+    sinceCure: own.sinceCure ?? other.sinceCure ?? null,
   };
 }

@@ -93,13 +93,15 @@ export function measuredAt({ reading }: ScanReadingResult): Date | null {
 
 function subjectOf(values: ProfileFileValues): WaferScanSubject {
   const { film, filmThickness, filmThicknessTolerance, siliconThickness, siliconThicknessTolerance } = values;
-  const { diameter, edgeExclusion, orientation } = values;
+  const { siliconThicknessFrom, sinceCure, diameter, edgeExclusion, orientation } = values;
   return {
     film,
     filmThickness,
     filmThicknessTolerance,
     siliconThickness,
     siliconThicknessTolerance,
+    siliconThicknessFrom,
+    sinceCure,
     diameter,
     edgeExclusion,
     orientation,

@@ -159,6 +159,21 @@ describe("mistakes", () => {
     expect(seen(analyseFilm(pairsOf(even(FILM_CURVATURE)), subjectOf({ usedAt: 1e-6 }), TODAY))).toContain(13);
   });
 
+  test("what was said of the thickness and of the cure is looked at", () => {
+    const said = (parameters: Partial<typeof MONITOR_PARAMETERS>, number: number) =>
+      analyseFilm(
+        pairsOf(even(FILM_CURVATURE)),
+        subjectOf({ film, parameters: { ...MONITOR_PARAMETERS, ...parameters } }),
+        TODAY,
+      ).mistakes.find((mistake) => mistake.number === number)?.state;
+    expect(said({ siliconThicknessFrom: "nominal" }, 4)).toBe("seen");
+    expect(said({ siliconThicknessFrom: "measured" }, 4)).toBe("not seen");
+    expect(said({ siliconThicknessFrom: null }, 4)).toBe("cannot tell");
+    expect(said({ sinceCure: 3600 }, 12)).toBe("seen");
+    expect(said({ sinceCure: 26 * 3600 }, 12)).toBe("not seen");
+    expect(said({ sinceCure: null }, 12)).toBe("cannot tell");
+  });
+
   test("seen in one of several scans name it", () => {
     const pairs = pairsOf(even(FILM_CURVATURE)).map((pair, n) =>
       n === 1 && pair.points ? withDays(pair, pair.points) : pair,

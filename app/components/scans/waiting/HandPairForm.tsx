@@ -78,6 +78,8 @@ function subjectTexts(file: WaitingDetail): Omit<Values, "partner"> {
     filmThicknessTolerance: length(film.filmThicknessTolerance, "µm"),
     siliconThickness: length(silicon.siliconThickness, "µm"),
     siliconThicknessTolerance: length(silicon.siliconThicknessTolerance, "µm"),
+    siliconThicknessFrom: silicon.siliconThicknessFrom ?? "",
+    sinceCure: quantityText(own.sinceCure ?? partner?.subject.sinceCure, "time", "h"),
     diameter: length(own.diameter, "mm"),
     edgeExclusion: length(own.edgeExclusion, "mm"),
     orientation: own.orientation,
