@@ -38,7 +38,7 @@ describe("the printed sheet", () => {
       "Steps 13 to 15",
       "Steps 16 to 19",
       "Back side up",
-      "Do not release: it rolls",
+      "Do not release: rolls",
     ])
       expect(text).toContain(words);
     expect(count(markup, "keep-whole border-b")).toBeGreaterThanOrEqual(3);
