@@ -1,6 +1,16 @@
 import { StrictMode, startTransition, useEffect } from "react";
 import { hydrateRoot } from "react-dom/client";
 import { HydratedRouter } from "react-router/dom";
+import { wipeDrafts } from "./lib/drafts.ts";
+
+// Before the router takes the form: whoever signs out leaves nothing behind in this browser.
+document.addEventListener(
+  "submit",
+  ({ target }) => {
+    if (target instanceof HTMLFormElement && target.getAttribute("action") === "/sign-out") wipeDrafts();
+  },
+  { capture: true },
+);
 
 /** The application in the browser; the document says when its scripts answer. */
 function Client() {

@@ -18,7 +18,8 @@ test.describe("a wafer scanned along four lines", () => {
     await openWafer(page);
     const answer = page.getByRole("region", { name: "Answer" });
     await expect(answer).toContainText(/Polymer dielectric A: 3[01]\.\d+.±.0\.\d+.MPa, tension\./);
-    await expect(answer).toContainText("The film makes a bowl.");
+    // Other tests give the program films that are thicker than the monitor's, which the answer then says in place of the shape.
+    await expect(page.getByText(/^Change by the film: bowl/)).toBeVisible();
     for (const of of MAPS)
       await expect(page.getByRole("img", { name: `${of}: heights over the wafer, notch down` })).toBeVisible();
     await expect(

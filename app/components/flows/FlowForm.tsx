@@ -8,6 +8,7 @@ import { MeasuredField } from "#app/components/forms/MeasuredField.tsx";
 import { NoteField } from "#app/components/forms/NoteField.tsx";
 import { SubmitButton } from "#app/components/forms/SubmitButton.tsx";
 import { LEAVE, UnsavedGuard } from "#app/components/forms/UnsavedGuard.tsx";
+import { useEdited } from "#app/components/forms/use-edited.ts";
 import { useRecordForm } from "#app/components/forms/use-record-form.ts";
 import { WAFER_KINDS } from "#app/engine/flow/handling-inputs.ts";
 import type { ExplainedChoice } from "#app/lib/flow-step-choices.ts";
@@ -32,9 +33,10 @@ interface Props {
 /** The head of a flow: whose it is, its name, and the silicon as it comes in. */
 export function FlowForm({ values, version, program, silicon, bond, origin, lastResult, back, save }: Props) {
   const [form, fields] = useRecordForm<FlowFormValues>({ lastResult, defaultValue: values });
+  const edited = useEdited(form.id);
   return (
     <Form method="post" {...getFormProps(form)} className="frame max-w-240 space-y-4 p-4 tablet:p-6">
-      <UnsavedGuard dirty={form.dirty} />
+      <UnsavedGuard dirty={edited} />
       <FormHead lastResult={lastResult} />
       {version !== null && <input type="hidden" name="version" value={version} />}
       {origin && <input type="hidden" name={origin.kind} value={origin.id} />}

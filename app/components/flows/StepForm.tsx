@@ -8,6 +8,7 @@ import { MeasuredField } from "#app/components/forms/MeasuredField.tsx";
 import { SubmitButton } from "#app/components/forms/SubmitButton.tsx";
 import { LEAVE, UnsavedGuard } from "#app/components/forms/UnsavedGuard.tsx";
 import { Notice } from "#app/components/ui/Notice.tsx";
+import { useEdited } from "#app/components/forms/use-edited.ts";
 import { useRecordForm } from "#app/components/forms/use-record-form.ts";
 import { STEP_KINDS } from "#app/engine/flow/model.ts";
 import { FACES_UP, HOLDINGS } from "#app/engine/vocabulary.ts";
@@ -61,6 +62,7 @@ interface FieldsProps extends Props {
 function StepFields(props: FieldsProps) {
   const { values, version, choices, lastResult, conflict, back, next, refilled, onRefill } = props;
   const [form, fields] = useRecordForm<StepFormValues>({ lastResult, defaultValue: values });
+  const edited = useEdited(form.id);
   const [kind, setKind] = useState(fields.kind.initialValue);
   const handling = fields.handling.getFieldset();
   const element = useRef<HTMLFormElement>(null);
@@ -78,7 +80,7 @@ function StepFields(props: FieldsProps) {
       <button type="submit" className="sr-only" tabIndex={-1} aria-hidden>
         Save step
       </button>
-      <UnsavedGuard dirty={form.dirty || refilled} />
+      <UnsavedGuard dirty={edited || refilled} />
       {conflict ? (
         <StepConflict
           conflict={conflict}

@@ -1,5 +1,6 @@
 import { useEffect } from "react";
 import { parse, useForm, type DefaultValue, type SubmissionResult } from "@conform-to/react";
+import { isEditedField, scriptsWereAtWork } from "./written-fields.ts";
 
 /**
  * A form whose fields are checked on the server and whose lists grow and shrink in the browser. What the server found wrong is
@@ -33,19 +34,7 @@ export function useRecordForm<Values extends Record<string, unknown>>({
 
 /** What was typed before the scripts were at work, or put back by the browser, counts as typed: live figures and the guard of unsaved edits see it. */
 function tellEarlierEdits(form: HTMLFormElement) {
+  if (scriptsWereAtWork()) return;
   for (const element of form.elements)
-    if (isEdited(element)) element.dispatchEvent(new Event("input", { bubbles: true }));
-}
-
-function isEdited(element: Element): boolean {
-  if (element instanceof HTMLSelectElement) {
-    const written = [...element.options].filter(({ defaultSelected }) => defaultSelected);
-    // Where the page's text chose none, a browser chooses the first.
-    return written.length > 0 ? !written.every(({ selected }) => selected) : element.selectedIndex > 0;
-  }
-  if (element instanceof HTMLTextAreaElement) return element.value !== element.defaultValue;
-  if (!(element instanceof HTMLInputElement)) return false;
-  return element.type === "checkbox" || element.type === "radio"
-    ? element.checked !== element.defaultChecked
-    : element.value !== element.defaultValue;
+    if (isEditedField(element)) element.dispatchEvent(new Event("input", { bubbles: true }));
 }

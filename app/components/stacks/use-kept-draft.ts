@@ -29,6 +29,10 @@ export function useKeptDraft({ person, record, version, opened, said, saved }: N
   // What was there when the page was opened: what is typed from now on is not offered back to who types it.
   const found = useMemo(() => (scripted ? keptDrafts(person, record) : []), [scripted, person, record]);
   useEffect(() => {
+    // Saved since, by a window that was closed before it could take its draft away.
+    for (const { name, said: kept } of found) if (kept === opened) dropDraft(name);
+  }, [found, opened]);
+  useEffect(() => {
     if (saved || said === opened) {
       if (own.current !== null) dropDraft(own.current);
       return undefined;

@@ -41,7 +41,9 @@ export async function sendFile(
   if (!response.ok || !response.headers.get("Content-Type")?.includes("json"))
     return refused(await sentenceOf(response));
   const answer = (await response.json()) as FileAnswer;
-  return answer.outcome === "job" ? waitForJob(answer.job, tell) : answer;
+  if (answer.outcome !== "job") return answer;
+  tell(0, file.file.size);
+  return waitForJob(answer.job, tell);
 }
 
 /** The sentence of a refusal by the server, where it gives one. */

@@ -33,13 +33,7 @@ describe("the printed sheet", () => {
     const markup = sheet("Tern");
     expect(count(markup, "<h1")).toBe(1);
     const text = words(markup);
-    for (const words of [
-      "Steps 1 to 12",
-      "Steps 13 to 15",
-      "Steps 16 to 19",
-      "Back side up",
-      "Do not release: rolls",
-    ])
+    for (const words of ["Steps 1 to 12", "Steps 13 to 15", "Steps 16 to 19", "Back side up", "Do not release: rolls"])
       expect(text).toContain(words);
     expect(count(markup, "keep-whole border-b")).toBeGreaterThanOrEqual(3);
   });

@@ -1,0 +1,33 @@
+import { useEffect, useState } from "react";
+import { isEditedField, scriptsWereAtWork } from "./written-fields.ts";
+
+/** Name of the buttons that add, move or take out a row of a form. */
+const INTENT = "__intent__";
+
+/**
+ * Whether somebody has typed into a form since its page was opened, or changed its rows. The form's own library compares with the record
+ * instead, of which a form may show a part.
+ */
+export function useEdited(formId: string): boolean {
+  const [edited, setEdited] = useState(false);
+  useEffect(() => {
+    const form = document.getElementById(formId);
+    if (form instanceof HTMLFormElement && !scriptsWereAtWork() && [...form.elements].some(isEditedField))
+      setEdited(true);
+    const typed = ({ target }: Event) => {
+      if (target instanceof Element && "form" in target && target.form === document.getElementById(formId))
+        setEdited(true);
+    };
+    const pressed = ({ target }: Event) => {
+      const button = target instanceof Element ? target.closest("button") : null;
+      if (button?.name === INTENT && button.form === document.getElementById(formId)) setEdited(true);
+    };
+    document.addEventListener("input", typed);
+    document.addEventListener("click", pressed);
+    return () => {
+      document.removeEventListener("input", typed);
+      document.removeEventListener("click", pressed);
+    };
+  }, [formId]);
+  return edited;
+}
