@@ -1,5 +1,4 @@
-import { useEffect, useState } from "react";
-import { isEditedField, scriptsWereAtWork } from "./written-fields.ts";
+import { useLayoutEffect, useState } from "react";
 
 /** Name of the buttons that add, move or take out a row of a form. */
 const INTENT = "__intent__";
@@ -10,10 +9,8 @@ const INTENT = "__intent__";
  */
 export function useEdited(formId: string): boolean {
   const [edited, setEdited] = useState(false);
-  useEffect(() => {
-    const form = document.getElementById(formId);
-    if (form instanceof HTMLFormElement && !scriptsWereAtWork() && [...form.elements].some(isEditedField))
-      setEdited(true);
+  // Before `useRecordForm` tells what was typed before the scripts came.
+  useLayoutEffect(() => {
     const typed = ({ target }: Event) => {
       if (target instanceof Element && "form" in target && target.form === document.getElementById(formId))
         setEdited(true);
