@@ -2,8 +2,7 @@ import { defineConfig } from "@playwright/test";
 
 /**
  * Browser tests, against the production build that `npm test` serves: BASE_URL says where, DEMO_ACCOUNTS_FILE names the
- * JSON file of the demo accounts, DATABASE_OWNER_URL is the way around its walls. The browser is
- * Debian's without its window, which takes a third of its time.
+ * JSON file of the demo accounts, DATABASE_OWNER_URL is the way around its walls, CHROMIUM is Debian's browser.
  */
 export default defineConfig({
   testDir: "../tests/browser",
@@ -18,7 +17,7 @@ export default defineConfig({
     baseURL: process.env["BASE_URL"],
     // `trace: "on"` shows a failure step by step, and costs a third of the time.
     launchOptions: {
-      executablePath: "/usr/bin/chromium-headless-shell",
+      executablePath: process.env["CHROMIUM"],
       args: [
         "--disable-gpu",
         "--disable-background-networking",

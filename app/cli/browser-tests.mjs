@@ -1,7 +1,8 @@
-import { existsSync, mkdirSync, rmSync } from "node:fs";
+import { mkdirSync, rmSync } from "node:fs";
 import { join } from "node:path";
 import { build } from "./build.mjs";
 import { asCheck } from "./checks.mjs";
+import { chromiumPackage, findChromium } from "./chromium.mjs";
 import { makeDatabase } from "./database.mjs";
 import { installDebianPackages } from "./debian.mjs";
 import { lastLinesOf } from "./logs.mjs";
@@ -13,9 +14,6 @@ import { serveBuild } from "./server.mjs";
 import { tallyPlaywright } from "./tally.mjs";
 import { accessTo, templateName } from "./test-database.mjs";
 import { keepWorker } from "./worker.mjs";
-
-/** Debian's browser without its window: Playwright does not bring one of its own here. */
-const chromium = "/usr/bin/chromium-headless-shell";
 
 const databaseName = "planeward_browser";
 
@@ -53,6 +51,7 @@ async function runPlaywright(checks, { folder, database, filters }) {
     [packageProgram("playwright"), "test", "--config=.config/playwright.config.ts", "--reporter=list,json", ...filters],
     {
       env: {
+        CHROMIUM: findChromium(),
         BASE_URL: `http://${loopback}:${port}`,
         DEMO_ACCOUNTS_FILE: accountsFile,
         // For what no page can set up, such as a program that nobody belongs to.
@@ -86,7 +85,7 @@ export async function runBrowserTests(checks, { folder, database, filters }) {
   let failed = 0;
   try {
     ({ failed } = await checks.count("playwright", async () => {
-      if (!existsSync(chromium)) await installDebianPackages(keeper, "Chromium", ["chromium-headless-shell"]);
+      if (!findChromium()) await installDebianPackages(keeper, "Chromium", [chromiumPackage]);
       if (!database || built.failed) throw new Sentence("No browser test was run: there is nothing to run it against.");
       return runPlaywright(checks, { folder, database, filters });
     }));

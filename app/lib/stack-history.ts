@@ -1,3 +1,5 @@
+import type { Direction } from "./undo-key.ts";
+
 /** A stack at each moment since it was opened, as the JSON of its text, with the way back; `at` is the one that stands. */
 export interface StackHistory {
   states: readonly string[];
@@ -16,8 +18,6 @@ export const standing = ({ states, at }: StackHistory): string => states[at] ?? 
 export function stateAfter({ states, at }: StackHistory, direction: Direction): string | null {
   return states[direction === "undo" ? at - 1 : at + 1] ?? null;
 }
-
-export type Direction = "undo" | "redo";
 
 /** Notes a new state; what had been taken back is gone with it. The very same history while nothing has changed. */
 export function note(history: StackHistory, said: string): StackHistory {

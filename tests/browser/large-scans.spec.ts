@@ -54,7 +54,7 @@ test.describe("a pair beyond a megabyte", () => {
   });
 });
 
-test("large files of a batch are read in the background, and become a scan of every point", async ({ page }) => {
+test("large files of a batch are read in the background while the page tells how far they are", async ({ page }) => {
   await signIn(page, "technician");
   await page.goto("/scans/import");
   const wafer = `M-${Math.random().toString(10).slice(2, 9)}`;
@@ -65,7 +65,16 @@ test("large files of a batch are read in the background, and become a scan of ev
   await page.getByLabel("Film thickness").fill("5 um");
   await page.getByLabel("Silicon thickness").fill("725 um");
   await page.getByLabel("Diameter").fill("200 mm");
+  // The worker may be done before the screen has asked it once.
+  let look = () => {};
+  const held = new Promise<void>((resolve) => (look = resolve));
+  await page.route(/\/scans\/import\/file\?job=/, async (route) => {
+    await held;
+    await route.continue();
+  });
   await page.getByRole("button", { name: "Import 2 files" }).click();
+  await expect(page.getByText(/is large: .* of 1\.\d MB read\. It goes on when you leave/)).toBeVisible();
+  look();
   await expect(page.getByText("2 imported.")).toBeVisible({ timeout: 60_000 });
   await page.getByRole("link", { name: `${wafer}, 0°` }).click();
   await expect(page.getByText("The fit was given every point").first()).toBeVisible();

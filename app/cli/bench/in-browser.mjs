@@ -1,8 +1,6 @@
-import { existsSync } from "node:fs";
 import { chromium } from "@playwright/test";
+import { findChromium } from "../chromium.mjs";
 import { bundled } from "./bundle.mjs";
-
-const CHROMIUM = "/usr/bin/chromium-headless-shell";
 
 /**
  * The chart's sweep in a real browser: 200 thicknesses of each stack, shape included.
@@ -12,9 +10,10 @@ const CHROMIUM = "/usr/bin/chromium-headless-shell";
  *   shortest of later ones; null where there is no Chromium
  */
 export async function sweepInBrowser(stacks) {
-  if (!existsSync(CHROMIUM)) return null;
+  const executablePath = findChromium();
+  if (!executablePath) return null;
   const { code } = await bundled({ "stack/thickness-sweep.ts": ["thicknessSweep"] }, "iife");
-  const browser = await chromium.launch({ executablePath: CHROMIUM, args: ["--no-sandbox"] });
+  const browser = await chromium.launch({ executablePath, args: ["--no-sandbox"] });
   try {
     const page = await browser.newPage();
     await page.addScriptTag({ content: code });

@@ -1,4 +1,5 @@
-import { useEffect, useRef, useState, type MouseEvent, type PointerEvent } from "react";
+import { useCallback, useRef, type MouseEvent, type PointerEvent } from "react";
+import { useDrag } from "#app/components/ui/use-drag.ts";
 import type { CutPlace } from "./cut-layout.ts";
 
 interface CutDrag {
@@ -16,27 +17,12 @@ const SLACK = 6;
  * place. Escape lets go. Everything that it does can be done by keys and buttons too.
  */
 export function useCutDrag(places: readonly CutPlace[], onMove: ((drag: CutDrag) => void) | undefined) {
-  const [drag, setDrag] = useState<CutDrag | null>(null);
   const begun = useRef<{ from: number; y: number } | null>(null);
-  // A pointer may be let go before what its last move said is drawn.
-  const current = useRef<CutDrag | null>(null);
   const dragged = useRef(false);
-  const show = (next: CutDrag | null) => {
-    current.current = next;
-    setDrag(next);
-  };
-  const dragging = drag !== null;
-  useEffect(() => {
-    if (!dragging) return undefined;
-    const letGo = (event: KeyboardEvent) => {
-      if (event.key !== "Escape") return;
-      begun.current = null;
-      current.current = null;
-      setDrag(null);
-    };
-    window.addEventListener("keydown", letGo);
-    return () => window.removeEventListener("keydown", letGo);
-  }, [dragging]);
+  const letGo = useCallback(() => {
+    begun.current = null;
+  }, []);
+  const { drag, current, show } = useDrag<CutDrag>(letGo);
   const handle = (from: number) => ({
     onPointerDown: (event: PointerEvent<SVGElement>) => {
       dragged.current = false;

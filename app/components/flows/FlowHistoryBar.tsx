@@ -1,5 +1,6 @@
 import { useEffect, useRef, type RefObject } from "react";
 import { useLocation, useNavigation, useSearchParams } from "react-router";
+import { undoKey, type Direction } from "#app/lib/undo-key.ts";
 import type { FlowHistory } from "#app/schemas/flow-plan.ts";
 import { StepIcon } from "./StepIcon.tsx";
 
@@ -80,12 +81,11 @@ function HistoryButton({ direction, words, form }: HistoryButtonProps) {
 }
 
 /**
- * Control or command with Z takes back, with shift does again; in a field they are the browser's own. Presses that come while one is on
- * its way wait for it.
+ * The keys that take back and do again; in a field they are the browser's own. Presses that come while one is on its way wait for it.
  */
 function useUndoKeys(bar: RefObject<HTMLElement | null>): void {
   const idle = useNavigation().state === "idle";
-  const waiting = useRef<("undo" | "redo")[]>([]);
+  const waiting = useRef<Direction[]>([]);
   useEffect(() => {
     const next = () => {
       const direction = idle ? waiting.current.shift() : undefined;
@@ -95,9 +95,7 @@ function useUndoKeys(bar: RefObject<HTMLElement | null>): void {
       button.click();
     };
     const press = (event: KeyboardEvent) => {
-      if (!(event.ctrlKey || event.metaKey) || event.altKey) return;
-      const key = event.key.toLowerCase();
-      const direction = key === "y" || (key === "z" && event.shiftKey) ? "redo" : key === "z" ? "undo" : null;
+      const direction = undoKey(event);
       const inField = event.target instanceof HTMLElement && event.target.closest("input, textarea, select") !== null;
       if (!direction || inField) return;
       event.preventDefault();

@@ -1,4 +1,5 @@
-import { useEffect, useRef, useState, type PointerEvent } from "react";
+import type { PointerEvent } from "react";
+import { useDrag } from "#app/components/ui/use-drag.ts";
 
 interface Drag {
   id: string;
@@ -27,23 +28,7 @@ function placeAt(y: number): number {
  * when that is another. Escape lets go. Everything that it does can be done by the buttons of the row too.
  */
 export function useStepDrag(onDrop: (id: string, number: number) => void) {
-  const [drag, setDrag] = useState<Drag | null>(null);
-  const current = useRef<Drag | null>(null);
-  const show = (next: Drag | null) => {
-    current.current = next;
-    setDrag(next);
-  };
-  const dragging = drag !== null;
-  useEffect(() => {
-    if (!dragging) return undefined;
-    const letGo = (event: KeyboardEvent) => {
-      if (event.key !== "Escape") return;
-      current.current = null;
-      setDrag(null);
-    };
-    window.addEventListener("keydown", letGo);
-    return () => window.removeEventListener("keydown", letGo);
-  }, [dragging]);
+  const { drag, current, show } = useDrag<Drag>();
   const handle = (id: string) => ({
     onPointerDown: (event: PointerEvent<HTMLElement>) => {
       if (event.button !== 0) return;

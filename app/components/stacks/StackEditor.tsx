@@ -9,7 +9,7 @@ import type { KeptDraft } from "#app/lib/drafts.ts";
 import type { StackAround } from "#app/lib/stack-around.ts";
 import type { StackConflict as Conflict } from "#app/lib/stack-conflict.ts";
 import type { DraftFault } from "#app/lib/stack-draft.ts";
-import type { Direction } from "#app/lib/stack-history.ts";
+import type { Direction } from "#app/lib/undo-key.ts";
 import { panelRequests, type StackPanel } from "#app/lib/stack-panel.ts";
 import { filmOf } from "#app/lib/stack-put-back.ts";
 import { stackText, type StackText } from "#app/lib/stack-text.ts";

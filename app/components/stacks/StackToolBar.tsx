@@ -1,5 +1,5 @@
 import { StepIcon } from "#app/components/flows/StepIcon.tsx";
-import type { Direction } from "#app/lib/stack-history.ts";
+import type { Direction } from "#app/lib/undo-key.ts";
 
 export interface StackToolBarProps {
   /** whether there is something to take back and to do again */

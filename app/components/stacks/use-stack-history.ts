@@ -1,5 +1,6 @@
 import { useState } from "react";
-import { beginHistory, note, standing, stateAfter, step, type Direction } from "#app/lib/stack-history.ts";
+import { beginHistory, note, standing, stateAfter, step } from "#app/lib/stack-history.ts";
+import type { Direction } from "#app/lib/undo-key.ts";
 
 /**
  * What has been done to a stack, with undo and redo. Text that is being typed into a field is noted once the field is left, everything

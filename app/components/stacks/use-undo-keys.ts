@@ -1,5 +1,5 @@
 import { useEffect, useRef } from "react";
-import type { Direction } from "#app/lib/stack-history.ts";
+import { undoKey, type Direction } from "#app/lib/undo-key.ts";
 
 /** Names of the fields that belong to the stack; what else stands in the form is only a way to look at it. */
 const OF_STACK = /^(?:name|note|silicon|siliconThickness|layers)\b/;
@@ -15,7 +15,7 @@ export function useUndoKeys(onStep: (direction: Direction) => void, unnoted: boo
   });
   useEffect(() => {
     const press = (event: KeyboardEvent) => {
-      const direction = directionOf(event);
+      const direction = undoKey(event);
       if (direction === null || isBrowsers(event.target, latest.current.unnoted)) return;
       event.preventDefault();
       latest.current.onStep(direction);
@@ -23,13 +23,6 @@ export function useUndoKeys(onStep: (direction: Direction) => void, unnoted: boo
     window.addEventListener("keydown", press);
     return () => window.removeEventListener("keydown", press);
   }, []);
-}
-
-function directionOf({ ctrlKey, metaKey, altKey, shiftKey, key }: KeyboardEvent): Direction | null {
-  if (!(ctrlKey || metaKey) || altKey) return null;
-  const letter = key.toLowerCase();
-  if (letter === "y") return "redo";
-  return letter === "z" ? (shiftKey ? "redo" : "undo") : null;
 }
 
 function isBrowsers(target: EventTarget | null, unnoted: boolean): boolean {
