@@ -73,7 +73,7 @@ test("large files of a batch are read in the background while the page tells how
     await route.continue();
   });
   await page.getByRole("button", { name: "Import 2 files" }).click();
-  await expect(page.getByText(/is large: .* of 1\.\d MB read\. It goes on when you leave/)).toBeVisible();
+  await expect(page.getByText(/is large: .* of 1\.\d\sMB read\. It goes on when you leave/)).toBeVisible();
   look();
   await expect(page.getByText("2 imported.")).toBeVisible({ timeout: 60_000 });
   await page.getByRole("link", { name: `${wafer}, 0°` }).click();
