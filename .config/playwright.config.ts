@@ -15,6 +15,8 @@ export default defineConfig({
   forbidOnly: true,
   use: {
     baseURL: process.env["BASE_URL"],
+    // It would stand between the pages and what a test answers in the server's place.
+    serviceWorkers: "block",
     // `trace: "on"` shows a failure step by step, and costs a third of the time.
     launchOptions: {
       executablePath: process.env["CHROMIUM"],

@@ -16,6 +16,9 @@ document.addEventListener(
 function Client() {
   useEffect(() => {
     document.documentElement.dataset["scripts"] = "at work";
+    // A page that the server cannot be asked for then says so in our words. Not every site serves us over a connection that allows it.
+    if (import.meta.env.PROD && "serviceWorker" in navigator)
+      navigator.serviceWorker.register("/unreachable.js").catch(() => undefined);
   }, []);
   return <HydratedRouter />;
 }

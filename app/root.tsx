@@ -1,3 +1,6 @@
+import regular from "@fontsource/noto-sans/files/noto-sans-latin-400-normal.woff2?url";
+import medium from "@fontsource/noto-sans/files/noto-sans-latin-500-normal.woff2?url";
+import semibold from "@fontsource/noto-sans/files/noto-sans-latin-600-normal.woff2?url";
 import {
   isRouteErrorResponse,
   Links,
@@ -19,9 +22,21 @@ import type { Route } from "./+types/root";
 
 export const middleware: Route.MiddlewareFunction[] = [requestLog, securityHeaders, originCheck, session];
 
+/** Every page needs these three; without being named here they would be found only once the style sheet is read. */
+const FONTS = [regular, medium, semibold];
+
 export const links: Route.LinksFunction = () => [
+  ...FONTS.map((href) => ({
+    rel: "preload" as const,
+    as: "font" as const,
+    type: "font/woff2",
+    href,
+    crossOrigin: "anonymous" as const,
+  })),
   { rel: "stylesheet", href: stylesheet },
   { rel: "icon", href: "/mark.svg", type: "image/svg+xml" },
+  { rel: "apple-touch-icon", href: "/icon-180.png" },
+  { rel: "manifest", href: "/planeward.webmanifest" },
 ];
 
 export function loader({ context }: Route.LoaderArgs) {

@@ -77,8 +77,9 @@ function waitForScripts(page: Page): void {
   };
 }
 
-/** The browser's own remark about an answer that is a refusal on purpose. */
-const REFUSED = /^Failed to load resource: the server responded with a status of (4\d\d)/;
+/** The browser's own remark about an answer that is a refusal on purpose, or that cannot come. */
+const REFUSED =
+  /^Failed to load resource: (the server responded with a status of (4\d\d)|net::ERR_INTERNET_DISCONNECTED)/;
 
 /**
  * Playwright's test with an eye on the page: a script that fails or complains fails the test. `refusals: true` lets the browser

@@ -19,8 +19,13 @@ function sentenceOf(error: unknown): string | null {
   return null;
 }
 
+/** Whether the page's data could not be fetched: a browser then throws a TypeError, in words of its own. */
+const isUnreachable = (error: unknown) =>
+  error instanceof TypeError && /fetch|network|load failed/i.test(error.message);
+
 /** What happened, what it means for the work, and where to go. Never a stack trace. */
 export function ErrorPage({ status, error }: { status: number; error: unknown }) {
+  if (isUnreachable(error)) return <Unreachable />;
   const sentence =
     sentenceOf(error) ??
     (status === 404
@@ -37,6 +42,25 @@ export function ErrorPage({ status, error }: { status: number; error: unknown })
         <Link to="/" className="link">
           Go to Today
         </Link>
+      </p>
+    </section>
+  );
+}
+
+function Unreachable() {
+  return (
+    <section className="frame max-w-160 p-6" aria-labelledby="error-title">
+      <h1 id="error-title" className="text-answer font-medium">
+        No way to the server
+      </h1>
+      <p className="mt-2">
+        This device is offline, or the server is being restarted. What was saved is saved; what you were sending may not
+        be: look before you send it again.
+      </p>
+      <p className="mt-4">
+        <a href="" className="btn">
+          Try again
+        </a>
       </p>
     </section>
   );

@@ -26,7 +26,6 @@ export function SearchOpener() {
     <>
       <Link
         to="/search"
-        aria-label="Search everything"
         aria-keyshortcuts="Control+K Meta+K"
         onClick={click}
         className="flex min-h-8 shrink-0 items-center gap-2 rounded border border-edge bg-raised px-2 text-quiet no-underline hover:border-ink tablet:w-64"
@@ -35,8 +34,12 @@ export function SearchOpener() {
           <circle cx="6.5" cy="6.5" r="4.75" />
           <path d="M10 10l5 5" />
         </svg>
-        <span className="max-tablet:hidden">Search</span>
-        <span className="ml-auto text-label max-tablet:hidden">Ctrl K</span>
+        <span className="max-tablet:sr-only">
+          Search<span className="sr-only"> everything</span>
+        </span>
+        <span className="ml-auto text-label max-tablet:hidden" aria-hidden>
+          Ctrl K
+        </span>
       </Link>
       {dialog}
     </>

@@ -10,11 +10,24 @@ import { thinningStory } from "#app/services/thinning-story.server.ts";
 import { startSession } from "#app/services/sessions.server.ts";
 import type { Route } from "./+types/sign-in";
 
-export const meta: Route.MetaFunction = () => [{ title: "Sign in · Planeward" }];
+const PROMISE = "Flat and strong enough for every step, before any silicon is committed.";
+
+/** Whoever follows a link without being signed in arrives here: what a message shows of any link is this page's card, and no more. */
+export const meta: Route.MetaFunction = ({ loaderData }) => [
+  { title: "Sign in · Planeward" },
+  { name: "description", content: PROMISE },
+  { property: "og:type", content: "website" },
+  { property: "og:title", content: "Planeward" },
+  { property: "og:description", content: PROMISE },
+  { property: "og:image", content: `${loaderData?.origin ?? ""}/social-card.png` },
+  { property: "og:image:width", content: "1200" },
+  { property: "og:image:height", content: "630" },
+  { property: "og:image:alt", content: `Planeward. ${PROMISE}` },
+];
 
 export function loader({ context, url }: Route.LoaderArgs) {
   if (context.get(actorContext)) throw redirect(localPath(url.searchParams.get("next")));
-  return thinningStory();
+  return { story: thinningStory(), origin: url.origin };
 }
 
 export async function action({ request, context, url }: Route.ActionArgs) {
@@ -47,15 +60,13 @@ export default function SignIn({ actionData, loaderData }: Route.ComponentProps)
   return (
     <main id="main" className="mx-auto max-w-page p-4 tablet:p-6">
       <div className="frame grid wide:grid-cols-[1fr_420px]">
-        <ThinningStory {...loaderData} />
+        <ThinningStory {...loaderData.story} />
         <div className="flex flex-col border-ink max-wide:border-t wide:border-l">
           <div className="grow p-6">
             <p className="flex items-center gap-2 text-figure font-semibold">
               <Mark /> Planeward
             </p>
-            <h1 className="mt-6 text-answer font-medium">
-              Flat and strong enough for every step, before any silicon is committed.
-            </h1>
+            <h1 className="mt-6 text-answer font-medium">{PROMISE}</h1>
           </div>
           <Form method="post" className="border-t border-ink" aria-label="Sign in">
             {errors?.["form"] && (
