@@ -149,7 +149,7 @@ test.describe("an engineer", () => {
     await page.keyboard.press("Enter");
     await expect(names).toContainText(["Plated copper A", "Polymer dielectric A"]);
     await expect(page.getByRole("button", { name: "Move up: Polymer dielectric A" })).toBeEnabled();
-    await page.getByRole("button", { name: "Remove Polymer dielectric A" }).click();
+    await page.getByRole("button", { name: "Remove film: Polymer dielectric A" }).click();
     await expect(names).toHaveCount(1);
     await expect(field(page, "layers[0].film")).toBeFocused();
     await page.getByRole("link", { name: "Add a film below" }).click();

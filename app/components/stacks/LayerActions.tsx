@@ -66,7 +66,7 @@ export function LayerActions({ form, index, side, first, last, name, edits }: Pr
           {...form.remove.getButtonProps({ name: "layers", index })}
           onClick={inPlace(() => edits.remove(index))}
           className="btn btn-remove col-span-2"
-          aria-label={`Remove ${name}`}
+          aria-label={`Remove film: ${name}`}
         >
           Remove film
         </button>

@@ -36,8 +36,11 @@ export function StackBuild(props: Props) {
   const { form, fields, programs, choices, draft, drawn, panel, limits, part, focusPart, edits, bar } = props;
   return (
     <>
-      {bar && (
+      {bar ? (
         <StackToolBar {...bar} onMirror={draft.layers.some(({ side }) => side === "front") ? edits.mirrorAll : null} />
+      ) : (
+        // Keeps its place until the scripts are there.
+        <div className="min-h-16 border-b border-line scriptless:hidden" />
       )}
       <StackHeadFields
         fields={fields}
