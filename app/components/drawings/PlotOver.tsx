@@ -3,6 +3,7 @@ import { alongLabel } from "./along-label.ts";
 import { colour } from "./colour.ts";
 import { coordinate } from "./coordinate.ts";
 import { limitLabels } from "./limit-labels.ts";
+import { limitsInList } from "./limits-in-list.ts";
 import type { Plot, PlotFrame, PlotScales } from "./plot.ts";
 import { PlotMarker } from "./PlotMarker.tsx";
 import { PlotMarks } from "./PlotMarks.tsx";
@@ -15,7 +16,7 @@ export interface PlotOverProps {
   frame: PlotFrame;
   scales: PlotScales;
   textSize: number;
-  /** Series are named in a list below instead of at their ends. */
+  /** Series are named in a list below instead of at their ends, and so are limits where they are many. */
   withoutEndLabels?: boolean;
 }
 
@@ -80,6 +81,7 @@ function otherVerticals({ plot, scales }: PlotOverProps): number[] {
 
 function XLimits(props: PlotOverProps) {
   const { plot, frame, scales, textSize } = props;
+  const inList = props.withoutEndLabels && limitsInList(plot);
   const limits = [...(plot.xLimits ?? [])]
     .sort((a, b) => a.value - b.value)
     .filter((limit) => scales.x(limit.value) > frame.left + 1 && scales.x(limit.value) < frame.right - 1);
@@ -122,13 +124,14 @@ function XLimits(props: PlotOverProps) {
   return (
     <>
       {drawn}
-      {words}
+      {inList ? null : words}
     </>
   );
 }
 
 function YLimits(props: PlotOverProps) {
   const { plot, frame, scales, textSize } = props;
+  const inList = props.withoutEndLabels && limitsInList(plot);
   return plot.yLimits?.map((limit) => {
     const y = scales.y(limit.value);
     if (y < frame.top || y > frame.bottom) return null;
@@ -136,13 +139,15 @@ function YLimits(props: PlotOverProps) {
     return (
       <g key={limit.value}>
         <path d={`M${frame.left} ${coordinate(y)}H${frame.right}`} stroke={colour("stop")} strokeDasharray="6 3" />
-        <text
-          x={frame.left + 6}
-          y={coordinate(below ? y + textSize * 1.2 : y - 5)}
-          style={{ ...halo(props, frame.left + 20), fontSize: textSize, fill: colour("stop") }}
-        >
-          {limit.lines.join(" ")}
-        </text>
+        {inList ? null : (
+          <text
+            x={frame.left + 6}
+            y={coordinate(below ? y + textSize * 1.2 : y - 5)}
+            style={{ ...halo(props, frame.left + 20), fontSize: textSize, fill: colour("stop") }}
+          >
+            {limit.lines.join(" ")}
+          </text>
+        )}
       </g>
     );
   });

@@ -19,7 +19,7 @@ export function FilmComparison({ choices, chosen: [one = null, other = null], ro
   const differing = rows?.filter(({ differs }) => differs).length ?? 0;
   return (
     <>
-      <Form className="mb-4 flex flex-wrap items-end gap-3" aria-label="Films to compare">
+      <Form className="mb-4 flex flex-wrap items-start gap-3" aria-label="Films to compare">
         <SelectField
           name="of"
           label="Film"
@@ -36,7 +36,7 @@ export function FilmComparison({ choices, chosen: [one = null, other = null], ro
           blank="Choose"
           key={`against ${other?.id}`}
         />
-        <button type="submit" className="btn">
+        <button type="submit" className="btn mt-5">
           Compare
         </button>
       </Form>

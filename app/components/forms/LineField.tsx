@@ -5,7 +5,7 @@ interface Props {
   field: FieldMetadata<string | undefined>;
   label: string;
   hint?: ReactNode;
-  type?: "text" | "date" | "number";
+  type?: "text" | "number";
   className?: string;
   input?: InputHTMLAttributes<HTMLInputElement>;
 }

@@ -62,7 +62,11 @@ export function ReferenceForm({ wafers, today, lastResult, back }: Props) {
             example="-45.2 µm"
             hint="Standard bow, device side up: a bowl is negative"
           />
-          <LineField field={fields.measuredOn} label="Measured on" type="date" />
+          <LineField
+            field={fields.measuredOn}
+            label="Measured on"
+            input={{ placeholder: "year-month-day", autoComplete: "off" }}
+          />
           <LineField field={fields.note} label="Note" className="tablet:col-span-2" />
         </div>
       </fieldset>

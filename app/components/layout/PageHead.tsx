@@ -18,25 +18,23 @@ export function PageHead({ title, remark, crumbs, actions }: Props) {
   const record = keptRecordAt(pathname);
   return (
     <div className="screen-only flex flex-wrap items-center gap-x-4 gap-y-2 py-4">
-      <div>
-        {crumbs && (
-          <nav aria-label="Path" className="text-quiet">
-            {crumbs.map(({ name, path }) => (
-              <span key={path}>
-                <Link to={path} className="link text-quiet">
-                  {name}
-                </Link>
-                <span aria-hidden> / </span>
-              </span>
-            ))}
-          </nav>
-        )}
-        <div className="flex items-center gap-1">
-          <h1 className={crumbs ? "text-figure font-medium" : "text-answer font-medium"}>{title}</h1>
-          {record && <StarButton {...record} />}
-        </div>
+      {crumbs && (
+        <nav aria-label="Path" className="-mb-2 basis-full text-quiet">
+          {crumbs.map(({ name, path }) => (
+            <span key={path}>
+              <Link to={path} className="link text-quiet">
+                {name}
+              </Link>
+              <span aria-hidden> / </span>
+            </span>
+          ))}
+        </nav>
+      )}
+      <div className="flex items-center gap-1">
+        <h1 className={crumbs ? "text-figure font-medium" : "text-answer font-medium"}>{title}</h1>
+        {record && <StarButton {...record} />}
       </div>
-      <p className="self-end pb-1 text-quiet">
+      <p className="text-quiet">
         {remark && <span className="mr-3">{remark}</span>}
         <MethodLink />
       </p>

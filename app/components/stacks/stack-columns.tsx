@@ -2,6 +2,7 @@ import { Link } from "react-router";
 import { BowLine } from "#app/components/drawings/BowLine.tsx";
 import { SupportTag } from "#app/components/drawings/SupportTag.tsx";
 import type { Column } from "#app/components/ui/DataTable.tsx";
+import { formatQuantity } from "#app/engine/units/format.ts";
 import { formatBare } from "#app/lib/format-measured.ts";
 import { shapeWords } from "#app/lib/stack-words.ts";
 import type { StackRow } from "#app/schemas/stack-row.ts";
@@ -14,10 +15,15 @@ export function stackColumns(exaggeration: number, flatWithin: number): Column<S
       key: "name",
       head: "Stack",
       sortable: true,
-      cell: ({ id, name }) => (
-        <Link to={`/stacks/${id}`} className="link">
-          {name}
-        </Link>
+      cell: ({ id, name, thickness }) => (
+        <>
+          <Link to={`/stacks/${id}`} className="link">
+            {name}
+          </Link>
+          <span className="block text-label text-quiet tablet:hidden print:hidden">
+            {formatQuantity(thickness, "length", { unit: "µm" })}
+          </span>
+        </>
       ),
     },
     { key: "program", head: "Program", sortable: true, wide: true, cell: ({ program }) => program },
@@ -35,6 +41,7 @@ export function stackColumns(exaggeration: number, flatWithin: number): Column<S
       unit: "µm",
       numeric: true,
       sortable: true,
+      wide: true,
       cell: ({ thickness }) => formatBare(thickness, "length", "µm"),
     },
     { key: "films", head: "Films", numeric: true, wide: true, cell: ({ films }) => films },

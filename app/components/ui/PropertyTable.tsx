@@ -13,6 +13,11 @@ export interface Property {
   missing?: string;
 }
 
+/** A phone has no room for the column: its words stand under the property there. */
+const ON_WIDE = "max-tablet:hidden print:table-cell";
+
+const where = (measured: Measured | null | undefined) => [measured?.note, measured?.on].filter(Boolean).join(", ");
+
 /** Properties of a material with tolerance, source and note: where every number comes from. */
 export function PropertyTable({ caption, properties }: { caption: string; properties: Property[] }) {
   return (
@@ -26,7 +31,9 @@ export function PropertyTable({ caption, properties }: { caption: string; proper
               Value ± tolerance
             </th>
             <th scope="col">Source</th>
-            <th scope="col">Where exactly</th>
+            <th scope="col" className={ON_WIDE}>
+              Where exactly
+            </th>
           </tr>
         </thead>
         <tbody>
@@ -34,6 +41,9 @@ export function PropertyTable({ caption, properties }: { caption: string; proper
             <tr key={label}>
               <th scope="row" className="font-normal">
                 {label}
+                {where(measured) !== "" && (
+                  <span className="block text-label text-quiet tablet:hidden print:hidden">{where(measured)}</span>
+                )}
               </th>
               <td className="num font-medium">
                 {measured ? formatMeasured(measured, dimension, { unit, sign }) : "–"}
@@ -45,7 +55,7 @@ export function PropertyTable({ caption, properties }: { caption: string; proper
                   <span className="text-quiet">{missing ?? "not given"}</span>
                 )}
               </td>
-              <td className="text-quiet">{[measured?.note, measured?.on].filter(Boolean).join(", ")}</td>
+              <td className={`text-quiet ${ON_WIDE}`}>{where(measured)}</td>
             </tr>
           ))}
         </tbody>

@@ -74,7 +74,7 @@ export default function Jobs({ loaderData: { jobs, programs, searched, mayUpload
       {jobs.length > 0 ? (
         <>
           <JobList jobs={jobs} />
-          <p className="text-label text-quiet">
+          <p className="mt-3 text-label text-quiet">
             Every file is kept as it came, and every point of it is fitted. Of a profile with more than {KEPT_POINTS}{" "}
             points the means of as many equal stretches are kept beside the fit, for drawing and for CSV.
           </p>

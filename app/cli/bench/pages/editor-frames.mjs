@@ -1,0 +1,48 @@
+import { median } from "../timing.mjs";
+
+const FILMS = 20;
+const KEYS = 41;
+
+/**
+ * The work of the page's thread for each key that is typed into the silicon thickness of a stack of 20 films, live figures, cut and
+ * chart included.
+ *
+ * @param {import("./signed-in.mjs").SignedIn} person
+ * @returns {Promise<{ median: number, worst: number }>} ms a key
+ */
+export async function editorFrames({ context }) {
+  const page = await context.newPage();
+  await page.goto("/stacks", { waitUntil: "networkidle" });
+  await page.locator('main table a[href^="/stacks/"]').first().click();
+  await page.locator('html[data-scripts="at work"]').waitFor();
+  const copies = page.getByRole("button", { name: /^Duplicate: / });
+  for (let films = await copies.count(); films < FILMS; films += 1) {
+    await copies.first().click({ force: true });
+    await page.waitForTimeout(60);
+  }
+  const silicon = page.getByLabel("Remaining silicon");
+  await silicon.fill("100 µm");
+  await page.waitForTimeout(2000);
+  await page.evaluate(() => {
+    globalThis.work = [];
+    new PerformanceObserver((list) => {
+      for (const { entryType, duration } of list.getEntries()) globalThis.work.push({ entryType, duration });
+    }).observe({ type: "long-animation-frame" });
+  });
+  const device = await context.newCDPSession(page);
+  await device.send("Performance.enable");
+  const busy = async () => {
+    const { metrics } = await device.send("Performance.getMetrics");
+    return 1e3 * (metrics.find(({ name }) => name === "TaskDuration")?.value ?? 0);
+  };
+  const times = [];
+  for (let n = 0; n < KEYS; n += 1) {
+    const start = await busy();
+    await silicon.press(n % 2 === 0 ? "End" : "Home");
+    await silicon.fill(`${60 + n} µm`);
+    await page.waitForTimeout(150);
+    times.push((await busy()) - start);
+  }
+  await page.close();
+  return { median: median(times), worst: Math.max(...times) };
+}
