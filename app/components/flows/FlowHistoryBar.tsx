@@ -28,7 +28,10 @@ export function FlowHistoryBar({ history, form }: Props) {
   }, [key, done]);
   if (!last) return null;
   return (
-    <div ref={bar} className="flex flex-wrap items-start gap-x-4 gap-y-2 border-b border-line px-4 py-2 tablet:px-6">
+    <div
+      ref={bar}
+      className="screen-only flex flex-wrap items-start gap-x-4 gap-y-2 border-b border-line px-4 py-2 tablet:px-6"
+    >
       <div className="flex gap-2">
         <HistoryButton direction="undo" words={undo} form={form} />
         <HistoryButton direction="redo" words={redo} form={form} />

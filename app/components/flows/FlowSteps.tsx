@@ -96,7 +96,7 @@ export function FlowSteps({ flowId, version, rows, history, mayEdit, fault }: Pr
             }
           />
           {mayEdit && (
-            <div className="flex flex-wrap items-center gap-x-4 gap-y-2 border-t border-ink p-4 tablet:px-6">
+            <div className="screen-only flex flex-wrap items-center gap-x-4 gap-y-2 border-t border-ink p-4 tablet:px-6">
               <AddStep flowId={flowId} rows={rows} />
               <p className="text-label text-quiet max-tablet:hidden">
                 In a row: Alt with an arrow moves the step. Control or command with Z takes back, with shift does it

@@ -53,7 +53,7 @@ export function StepTable({ caption, rows, href, current, actions, more, drag, b
               Held by
             </th>
             {actions && (
-              <th scope="col" className="max-tablet:hidden">
+              <th scope="col" className="screen-only max-tablet:hidden">
                 <span className="sr-only">Change the order</span>
               </th>
             )}
@@ -129,7 +129,7 @@ function Row({ row, href, current, actions, more, handle, look }: RowProps) {
           // For the pointer only: the buttons of the row do the same for everybody.
           <span
             {...handle}
-            className="-my-1.5 mr-1 -ml-2 inline-flex h-8 w-6 cursor-grab touch-none items-center justify-center align-middle text-quiet select-none active:cursor-grabbing max-tablet:hidden"
+            className="screen-only -my-1.5 mr-1 -ml-2 inline-flex h-8 w-6 cursor-grab touch-none items-center justify-center align-middle text-quiet select-none active:cursor-grabbing max-tablet:hidden"
             title="Drag to move"
             aria-hidden
           >
@@ -201,7 +201,7 @@ function Row({ row, href, current, actions, more, handle, look }: RowProps) {
         {bond && <span className="block text-label text-quiet">{noBreak(bond)}</span>}
         {sideUp && <span className="block text-label text-quiet">{sideUp} up</span>}
       </td>
-      {actions && <td className="align-top max-tablet:hidden tablet:pr-4">{actions(row)}</td>}
+      {actions && <td className="screen-only align-top max-tablet:hidden tablet:pr-4">{actions(row)}</td>}
     </tr>
   );
 }

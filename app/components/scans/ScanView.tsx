@@ -20,10 +20,6 @@ export function ScanView({ scan }: { scan: ScanDetail }) {
   const mm = (metres: number) => formatQuantity(metres, "length", { unit: "mm", significant: 3, trim: true });
   return (
     <div className="frame">
-      <p className="print-only border-b border-line p-4">
-        {label}, program {scan.program.name}. Read {scan.createdAt.slice(0, 10)} by {scan.createdBy}, engine{" "}
-        {scan.engineVersion}.
-      </p>
       <AnswerLine
         figuresBelow
         level={2}

@@ -31,7 +31,7 @@ export function LayerActions({ form, index, side, first, last, name, edits }: Pr
     className: "btn",
   });
   return (
-    <div className="mt-4">
+    <div className="screen-only mt-4">
       <div className="grid grid-cols-2 gap-2">
         <button {...move(-1)} disabled={first} aria-label={`Move up: ${name}`}>
           Move up

@@ -16,7 +16,7 @@ export interface StackToolBarProps {
 /** Undo and redo, what is done to the stack as a whole, and whether what is typed is kept. */
 export function StackToolBar({ ways, onStep, onMirror, keptAt, said }: StackToolBarProps) {
   return (
-    <div className="flex min-h-16 flex-wrap items-center gap-2 border-b border-line px-4 py-2 tablet:px-5">
+    <div className="screen-only flex min-h-16 flex-wrap items-center gap-2 border-b border-line px-4 py-2 tablet:px-5">
       <StepButton direction="undo" words="Undo" can={ways.undo} onStep={onStep} />
       <StepButton direction="redo" words="Redo" can={ways.redo} onStep={onStep} />
       <button
