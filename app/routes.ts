@@ -15,6 +15,7 @@ export default [
     route("sheets/:assessmentId", "routes/_print/sheet.tsx"),
     route("assessments/change-request/print", "routes/_print/change-request.tsx"),
     route("stacks/compare/print", "routes/_print/comparison.tsx"),
+    route("stacks/:stackId/sweep/print", "routes/_print/sweep.tsx"),
   ]),
   layout("routes/_app/layout.tsx", [
     index("routes/_app/today.tsx"),
@@ -34,7 +35,11 @@ export default [
       route("compare", "routes/_app/stacks/compare.tsx"),
       route("compare.csv", "routes/_app/stacks/compare-csv.ts"),
       route("compare.svg", "routes/_app/stacks/compare-svg.ts"),
+      route("sweep", "routes/_app/stacks/sweep-choice.tsx"),
       route(":stackId", "routes/_app/stacks/stack.tsx"),
+      route(":stackId/sweep", "routes/_app/stacks/sweep.tsx"),
+      route(":stackId/sweep.csv", "routes/_app/stacks/sweep-csv.ts"),
+      route(":stackId/sweep.svg", "routes/_app/stacks/sweep-svg.ts"),
     ]),
     ...prefix("flows", [
       index("routes/_app/flows/list.tsx"),

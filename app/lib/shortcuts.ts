@@ -49,4 +49,8 @@ export const SHORTCUTS: readonly { where: string; keys: readonly Shortcut[] }[] 
     where: "Under a chart",
     keys: [{ keys: ["Left", "Right"], does: "Move the cursor, which reads out the figures where it stands" }],
   },
+  {
+    where: "Under a map of a stack",
+    keys: [{ keys: ["Left", "Right", "Up", "Down"], does: "Move the place that is read out" }],
+  },
 ];

@@ -55,6 +55,7 @@ export function PlotOver(props: PlotOverProps) {
       <XLimits {...props} />
       <YLimits {...props} />
       <Regime {...props} />
+      <Shaded {...props} />
       {withoutEndLabels ? null : <Along {...props} />}
       <PlotMarks plot={plot} frame={frame} scales={scales} textSize={textSize} />
       <Chosen {...props} />
@@ -186,6 +187,38 @@ function Regime(props: PlotOverProps) {
       ) : null}
     </>
   );
+}
+
+function Shaded(props: PlotOverProps) {
+  const { plot, frame, scales, textSize } = props;
+  return plot.shaded?.map(({ from, to, label }) => {
+    const [left, right] = [scales.x(from), scales.x(to)];
+    const edges = [left, right].filter((edge) => edge > frame.left + 0.5 && edge < frame.right - 0.5);
+    const fits = textWidth(label, textSize) + 12 <= Math.min(right, frame.right) - Math.max(left, frame.left);
+    return (
+      <g key={from}>
+        <path
+          d={edges.map((edge) => `M${coordinate(edge)} ${frame.top}V${frame.bottom}`).join("")}
+          stroke={colour("ink")}
+        />
+        {fits ? (
+          <text
+            x={coordinate(Math.max(left, frame.left) + 6)}
+            y={coordinate(frame.top + textSize * 1.12)}
+            style={{
+              fontSize: textSize,
+              fill: colour("quiet"),
+              paintOrder: "stroke",
+              stroke: colour("wash"),
+              strokeWidth: 3,
+            }}
+          >
+            {label}
+          </text>
+        ) : null}
+      </g>
+    );
+  });
 }
 
 function Along(props: PlotOverProps) {

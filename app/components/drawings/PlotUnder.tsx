@@ -12,7 +12,7 @@ const RULE_PITCH = 5;
 /** A band over a single place is a bar this wide, px. */
 const BAR = 8;
 
-/** What lies under a plot's grid: the shaded regime, level lines over what was left out, and bands. */
+/** What lies under a plot's grid: the shaded regime and stretches, level lines over what was left out, and bands. */
 export function PlotUnder({ plot, frame, scales }: PlotUnderProps) {
   const regimeEnd = plot.regime ? Math.min(frame.right, scales.x(plot.regime.upTo)) : frame.left;
   return (
@@ -26,6 +26,19 @@ export function PlotUnder({ plot, frame, scales }: PlotUnderProps) {
           fill={colour("wash")}
         />
       ) : null}
+      {plot.shaded?.map(({ from, to }) => {
+        const [left, right] = [Math.max(frame.left, scales.x(from)), Math.min(frame.right, scales.x(to))];
+        return right > left ? (
+          <rect
+            key={from}
+            x={coordinate(left)}
+            y={frame.top}
+            width={coordinate(right - left)}
+            height={frame.bottom - frame.top}
+            fill={colour("wash")}
+          />
+        ) : null;
+      })}
       {plot.leftOut?.map(({ from, to }) => {
         const left = Math.max(frame.left, scales.x(from));
         const right = Math.min(frame.right, scales.x(to));

@@ -96,6 +96,8 @@ export interface Plot {
   yLimits?: readonly PlotLimit[];
   /** Shaded from the left edge; `label` stands right of its line at the top, `inside` left of it. */
   regime?: { upTo: number; label: string; inside: string };
+  /** Shaded between two places, each with its words at the top where they fit. */
+  shaded?: readonly (PlotStretch & { label: string })[];
   /** The value that the reader has chosen: a dot, a drop line and a mark on the axis. */
   chosen?: PlotPoint;
   /** Stretches of x that were left out, ruled with level lines. */

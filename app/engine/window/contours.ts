@@ -4,10 +4,16 @@ export interface ContourPoint {
   y: number;
 }
 
+/** A corner of a cell with how far the field is off the level there. */
+export type ContourCorner = ContourPoint & { off: number };
+
+/** Where between two corners on different sides of a level the field takes it. Asked once for each side of a cell. */
+export type FindCrossing = (one: ContourCorner, other: ContourCorner) => ContourPoint;
+
 /**
- * Lines on which a field over a grid takes a level, by marching squares with straight interpolation along the cells' sides. A saddle
- * is cut by the mean of its corners. A cell with an unknown corner is left out. Pieces that meet are joined; a closed line ends
- * where it begins.
+ * Lines on which a field over a grid takes a level, by marching squares. Where along a cell's side it does is found by straight
+ * interpolation, unless `find` knows better. A saddle is cut by the mean of its corners. A cell with an unknown corner is left out.
+ * Pieces that meet are joined; a closed line ends where it begins.
  * @param values row by row, x running fastest; null where unknown
  */
 export function contours(
@@ -15,13 +21,27 @@ export function contours(
   y: readonly number[],
   values: readonly (number | null)[],
   level: number,
+  find: FindCrossing = straight,
 ): ContourPoint[][] {
   const pieces: [ContourPoint, ContourPoint][] = [];
+  const cross = onceForEachSide(find);
   for (let row = 0; row + 1 < y.length; row += 1)
     for (let column = 0; column + 1 < x.length; column += 1)
       if (isCrossed(values, row * x.length + column, x.length, level))
-        pieces.push(...cellPieces(x, y, values, level, column, row));
+        pieces.push(...cellPieces(x, y, values, level, column, row, cross));
   return joined(pieces);
+}
+
+/** The cells on both sides ask from the same corners, if in turn, and are told the same. */
+function onceForEachSide(find: FindCrossing): FindCrossing {
+  const found = new Map<string, ContourPoint>();
+  return (one, other) => {
+    const [first, last] = one.y < other.y || (one.y === other.y && one.x <= other.x) ? [one, other] : [other, one];
+    const side = `${first.x} ${first.y} ${last.x} ${last.y}`;
+    const at = found.get(side) ?? find(first, last);
+    found.set(side, at);
+    return at;
+  };
 }
 
 /** Whether the corners of a cell are known and lie on both sides of the level: most cells are passed over here, without an object. */
@@ -33,8 +53,6 @@ function isCrossed(values: readonly (number | null)[], at: number, width: number
   return b >= level !== above || c >= level !== above || d >= level !== above;
 }
 
-type Corner = ContourPoint & { off: number };
-
 function cellPieces(
   x: readonly number[],
   y: readonly number[],
@@ -42,8 +60,9 @@ function cellPieces(
   level: number,
   column: number,
   row: number,
+  find: FindCrossing,
 ): [ContourPoint, ContourPoint][] {
-  const corners: Corner[] = [];
+  const corners: ContourCorner[] = [];
   for (const [along, down] of [
     [0, 0],
     [1, 0],
@@ -57,7 +76,7 @@ function cellPieces(
   }
   const crossings = corners.flatMap((corner, index) => {
     const next = corners[(index + 1) % 4];
-    return next && corner.off >= 0 !== next.off >= 0 ? [crossing(corner, next)] : [];
+    return next && corner.off >= 0 !== next.off >= 0 ? [find(corner, next)] : [];
   });
   const [a, b, c, d] = crossings;
   if (a && b && c && d) {
@@ -76,14 +95,14 @@ function cellPieces(
   return a && b ? [[a, b]] : [];
 }
 
-function crossing(one: Corner, other: Corner): ContourPoint {
+function straight(one: ContourCorner, other: ContourCorner): ContourPoint {
   const share = one.off / (one.off - other.off);
   return { x: one.x + (other.x - one.x) * share, y: one.y + (other.y - one.y) * share };
 }
 
 const same = (a: ContourPoint, b: ContourPoint) => a.x === b.x && a.y === b.y;
 
-/** Pieces end to end. Neighbouring cells compute a crossing from the same two corners, if in turn; so ends are compared by key. */
+/** Pieces end to end. Ends are compared by key: a crossing in a corner of the grid is found along several sides. */
 function joined(pieces: readonly [ContourPoint, ContourPoint][]): ContourPoint[][] {
   const key = ({ x, y }: ContourPoint) => `${x.toPrecision(10)} ${y.toPrecision(10)}`;
   const open = new Map<string, ContourPoint[]>();

@@ -1,7 +1,7 @@
 import { atItsTemperature, freeDisc, pullOf } from "#app/engine/stack/estimate-stack.ts";
 import { withThickness, type StackInput } from "#app/engine/stack/model.ts";
 import { bowUncertainty } from "#app/engine/stack/warp-uncertainty.ts";
-import { reachedWaferShape } from "#app/engine/plate/free-wafer-shape.ts";
+import { reachedWaferShape, type ReachedWaferShape } from "#app/engine/plate/free-wafer-shape.ts";
 import type { ShapeRegime } from "#app/engine/vocabulary.ts";
 import type { ComparedInputs } from "#app/schemas/stack-comparison.ts";
 import { HALF_TURN } from "../stack-chart.ts";
@@ -57,13 +57,21 @@ export function stackFigures(estimated: Estimated): StackFigures {
   };
 }
 
+/** Warp of the free wafer at another thickness of its silicon (m), by the full model. */
+export function warpAt(stack: StackInput, thickness: number): WarpAt {
+  const shape = reachedWaferShape(freeDisc(withThickness(stack, thickness)).disc);
+  const { warp, regime } = shape;
+  return { thickness, warp, regime, rolledUp: shareOfHalfTurn(shape, stack.wafer.diameter) >= 1 };
+}
+
 /** A roll that has closed is lower than one of half a turn: from this share of that one's radius on it tells by its radius. */
 const CLOSING = 0.75;
 
-/** Warp of the free wafer at another thickness of its silicon (m), by the full model. */
-export function warpAt(stack: StackInput, thickness: number): WarpAt {
-  const { warp, regime, rollRadius } = reachedWaferShape(freeDisc(withThickness(stack, thickness)).disc);
-  const halfTurn = (HALF_TURN * stack.wafer.diameter) / 2;
-  const rolledUp = warp >= halfTurn || (rollRadius !== null && rollRadius < CLOSING * halfTurn);
-  return { thickness, warp, regime, rolledUp };
+/** How far a free wafer of a diameter (m) is rolled: from 1 on past half a turn across, where its warp means nothing any more. */
+export function shareOfHalfTurn(
+  { warp, rollRadius }: Pick<ReachedWaferShape, "warp" | "rollRadius">,
+  diameter: number,
+): number {
+  const halfTurn = (HALF_TURN * diameter) / 2;
+  return Math.max(warp / halfTurn, rollRadius === null ? 0 : (CLOSING * halfTurn) / rollRadius);
 }

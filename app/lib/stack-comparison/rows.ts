@@ -58,7 +58,8 @@ function waferRows(stacks: readonly ComparedStack[]): ComparedRow[] {
   ];
 }
 
-function slotTitle({ name, side, occurrence, key }: FilmSlot, slots: readonly FilmSlot[]): string {
+/** A film by its name and its place. */
+export function slotTitle({ name, side, occurrence, key }: FilmSlot, slots: readonly FilmSlot[]): string {
   const [film] = key.split(/ \d+$/);
   const several = slots.filter((slot) => slot.key.startsWith(`${film} `)).length > 1;
   return `${name}, ${SIDE_NAMES[side]}${several ? `, number ${occurrence} from the silicon` : ""}`;

@@ -55,7 +55,8 @@ const thickestOf = (stacks: readonly StackDetail[]) =>
     ...stacks.map(({ silicon, siliconThickness }) => Math.max(silicon.nominalThickness, siliconThickness.value)),
   );
 
-async function toolsOf(scope: ActorScope): Promise<ComparedTool[]> {
+/** Tools with a warp limit. */
+export async function toolsOf(scope: ActorScope): Promise<ComparedTool[]> {
   const tools = await allOfLibrary(scope, "equipment");
   return tools
     .map(({ id, name, warpLimitEdgesUp, warpLimitEdgesDown, largestDiameter }) => ({

@@ -3,12 +3,12 @@ import { PageHead } from "#app/components/layout/PageHead.tsx";
 import { EmptyState } from "#app/components/ui/EmptyState.tsx";
 import { Notice } from "#app/components/ui/Notice.tsx";
 import { count } from "#app/lib/count-words.ts";
-import { MOST_STACKS } from "#app/lib/stack-comparison/asked.ts";
+import { comparisonSearch, MOST_STACKS } from "#app/lib/stack-comparison/asked.ts";
 import type { ComparisonView } from "#app/schemas/stack-comparison.ts";
 import { AddStack } from "./AddStack.tsx";
 import { ChosenStacks } from "./ChosenStacks.tsx";
-import { CompareExports } from "./CompareExports.tsx";
 import { Compared } from "./Compared.tsx";
+import { ExportLinks } from "./ExportLinks.tsx";
 
 /** Stacks side by side: which, over what, and everything that differs. */
 export function ComparePage({ view }: { view: ComparisonView }) {
@@ -19,7 +19,15 @@ export function ComparePage({ view }: { view: ComparisonView }) {
       <PageHead
         title="Compare stacks"
         crumbs={[{ name: "Stacks", path: "/stacks" }]}
-        actions={compared && <CompareExports asked={asked} />}
+        actions={
+          compared && (
+            <ExportLinks
+              page="/stacks/compare"
+              search={comparisonSearch({ ...asked, query: "" })}
+              picture="comparison-of-stacks"
+            />
+          )
+        }
       />
       {missing > 0 ? (
         <Notice kind="caution" title={missing === 1 ? "No such stack" : `No such stack, ${count(missing)} times`}>

@@ -3,9 +3,10 @@ const SCALE = 2;
 
 /**
  * Draws an SVG file of this server onto a canvas and has the browser save it as a PNG.
+ * @param name of the file, without its ending
  * @throws when the drawing did not come or the picture could not be made
  */
-export async function saveAsPicture(address: string): Promise<void> {
+export async function saveAsPicture(address: string, name: string): Promise<void> {
   const image = new Image();
   image.src = address;
   await image.decode();
@@ -19,7 +20,7 @@ export async function saveAsPicture(address: string): Promise<void> {
   if (!picture) throw new Error("no picture");
   const link = document.createElement("a");
   link.href = URL.createObjectURL(picture);
-  link.download = "comparison-of-stacks.png";
+  link.download = `${name}.png`;
   link.click();
   URL.revokeObjectURL(link.href);
 }

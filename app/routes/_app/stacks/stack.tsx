@@ -43,6 +43,9 @@ export default function Stack({ loaderData, actionData }: Route.ComponentProps) 
             <Link to={`/stacks/compare?of=${id}`} className="btn">
               Compare
             </Link>
+            <Link to={`/stacks/${id}/sweep`} className="btn">
+              Sweep
+            </Link>
             {mayEdit && (
               <>
                 <Link to={`/stacks/new?from=${id}`} className="btn">

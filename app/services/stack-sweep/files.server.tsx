@@ -1,0 +1,21 @@
+import { SweepFile } from "#app/components/stacks/sweep/SweepFile.tsx";
+import { answerOf } from "#app/lib/stack-sweep/answers.ts";
+import { sweepCsv } from "#app/lib/stack-sweep/csv.ts";
+import type { ActorScope } from "#app/server/scope.server.ts";
+import { svgFile } from "../svg-file.server.ts";
+import { sweptStack } from "./sweep.server.ts";
+
+/** A sweep as files; refused while something is wrong with what was asked. */
+export async function sweepFile(
+  scope: ActorScope,
+  id: string | undefined,
+  search: URLSearchParams,
+): Promise<{ name: string; csv: () => string; svg: () => string }> {
+  const { name, stack, swept } = await sweptStack(scope, id, search);
+  const answer = answerOf(swept.answer);
+  return {
+    name,
+    csv: () => (answer ? sweepCsv(swept, answer) : ""),
+    svg: () => svgFile(<SweepFile stack={stack} swept={swept} />),
+  };
+}
