@@ -10,8 +10,9 @@ export function LoadDemo({ primary = false }: { primary?: boolean }) {
       </h2>
       <p className="mt-1 text-quiet">
         The demo is an invented pilot line: three programs with their films, stacks, flows and scans, and an assessment.
-        Everybody here who is more than a guest sees it with the role that they have. Its people are names only: nobody
-        can sign in as one of them. It is removed as easily as it comes, and leaves what you make yourselves alone.
+        Everybody here who is more than a guest sees it with the role that they have. People of the demo who have no
+        account here are names only: nobody can sign in as one of them. It is removed as easily as it comes, and leaves
+        what you make yourselves alone.
       </p>
       <Form method="post" action="/demo" className="mt-4">
         <input type="hidden" name="intent" value="load" />

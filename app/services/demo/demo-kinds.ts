@@ -88,8 +88,8 @@ export const DEMO_KINDS: readonly DemoKind[] = [
       select 1 from reference_reading r where r.wafer_id = x.id and (r.profile_id is null or r.profile_id not in (${goingOf("import_profile")})))`,
   },
   {
-    ...ofProgram("reference_reading", "reading of it", "x.instrument || ', ' || x.measured_on"),
-    many: "readings of them",
+    ...ofProgram("reference_reading", "reading of a known bow", "x.instrument || ', ' || x.measured_on"),
+    many: "readings of known bows",
     goes: `x.profile_id in (${goingOf("import_profile")})`,
   },
 ];
