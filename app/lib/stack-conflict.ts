@@ -1,3 +1,4 @@
+import type { ConflictRow } from "./record-conflict.ts";
 import { stackDifferences, type StackNames } from "./stack-differences.ts";
 import type { StackText } from "./stack-text.ts";
 
@@ -9,13 +10,6 @@ export interface StackConflict {
   /** of what is saved now */
   version: number;
   theirs: StackText;
-}
-
-/** A field in which two versions differ. */
-export interface ConflictRow {
-  label: string;
-  mine: string;
-  theirs: string;
 }
 
 /** Where two versions of a stack differ when nobody knows any more what it was before, as without scripts. */

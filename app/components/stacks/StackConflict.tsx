@@ -1,5 +1,6 @@
 import { useEffect, useRef, useState } from "react";
 import { Link } from "react-router";
+import { ConflictTable } from "#app/components/forms/ConflictTable.tsx";
 import { Notice } from "#app/components/ui/Notice.tsx";
 import { useInBrowser } from "#app/components/ui/use-in-browser.ts";
 import { conflictRows, type StackConflict as Conflict } from "#app/lib/stack-conflict.ts";
@@ -7,7 +8,6 @@ import type { StackNames } from "#app/lib/stack-differences.ts";
 import type { MergeChoices, MergeRow } from "#app/lib/stack-merge-rows.ts";
 import { mergeOf, undecided, type StackMerge } from "#app/lib/stack-merge.ts";
 import type { StackText } from "#app/lib/stack-text.ts";
-import { ConflictTable } from "./ConflictTable.tsx";
 import { MergeTable } from "./MergeTable.tsx";
 
 interface Props {

@@ -1,4 +1,4 @@
-import type { ConflictRow } from "#app/lib/stack-conflict.ts";
+import type { ConflictRow } from "#app/lib/record-conflict.ts";
 
 /** Two versions beside each other, where what was before them is not known. */
 export function ConflictTable({ rows, by }: { rows: readonly ConflictRow[]; by: string }) {
