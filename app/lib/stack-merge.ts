@@ -162,12 +162,13 @@ function wholeFilm({ id, opened, mine, theirs }: Film, by: MergeRow["by"], names
   return { id, rows: [row], decide: (choices) => ({ mine, theirs })[whoseOf(row, choices)]?.layer ?? null };
 }
 
-/** 'Plated copper A, 5 µm, device side, 2 of 3 from the top', with whatever else differs among the films beside it. */
+/** '5 µm, device side, 2 of 3 from the top', with its name and whatever else differs among the films beside it. */
 function filmWords(film: Placed, among: readonly LayerText[], names: StackNames): string {
   const others = FILM_UNITS.filter(({ field }) => field !== "film" && field !== "thickness").flatMap((unit) => {
     const differs = among.some((other) => differing(unit, film.layer, other).length > 0);
     return differs ? [`${unit.label.toLowerCase()}: ${wordsOf(unit, among, names)(film.layer)}`] : [];
   });
   const thickness = film.layer.thickness.value || "without a thickness";
-  return [filmName(film), thickness, film.words, ...others].join(", ");
+  const name = among.some(({ film: id }) => id !== film.layer.film) ? [filmName(film)] : [];
+  return [...name, thickness, film.words, ...others].join(", ");
 }

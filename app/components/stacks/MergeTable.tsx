@@ -18,8 +18,12 @@ export function MergeTable({ rows, by, choices, onChoose }: Props) {
         <thead>
           <tr>
             <th scope="col">Field</th>
-            <th scope="col">Who changed it</th>
-            <th scope="col">As you opened it</th>
+            <th scope="col" className="max-tablet:hidden">
+              Who changed it
+            </th>
+            <th scope="col" className="max-tablet:hidden">
+              As you opened it
+            </th>
             <th scope="col">Yours</th>
             <th scope="col">Saved by {by}</th>
           </tr>
@@ -48,16 +52,18 @@ function Row({ row, chosen, onChoose }: RowProps) {
     <tr>
       <th scope="row" className={by === "both" ? "font-semibold" : "font-normal"}>
         {label}
+        <span className="block text-label font-normal text-quiet tablet:hidden">{`${WHO[by]}; it was ${opened}`}</span>
         {asked && <span className="block text-label font-semibold text-stop">choose one</span>}
       </th>
-      <td className={by === "both" ? "font-semibold" : undefined}>{WHO[by]}</td>
-      <td className="text-quiet">{opened}</td>
+      <td className={`max-tablet:hidden ${by === "both" ? "font-semibold" : ""}`}>{WHO[by]}</td>
+      <td className="text-quiet max-tablet:hidden">{opened}</td>
       {(["mine", "theirs"] as const).map((whose) => (
         <td key={whose} className={stands !== null && stands !== whose ? "text-quiet" : undefined}>
           <label className="flex min-h-6 items-baseline gap-2 max-tablet:min-h-11">
             {/* Of no form: the stack's own fields beside it are what is sent. */}
             <input
               type="radio"
+              className="accent-ink"
               form="none"
               name={`whose ${key}`}
               data-undecided={asked || undefined}
