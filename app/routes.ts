@@ -112,6 +112,7 @@ export default [
       route(":instrumentId/study", "routes/_app/instruments/study.tsx"),
       route(":instrumentId/reference", "routes/_app/instruments/reference.tsx"),
     ]),
+    route("demo", "routes/_app/demo.tsx"),
     route("preferences", "routes/_app/preferences.tsx"),
     route("favourites", "routes/_app/favourites.tsx"),
     route("saved-filters", "routes/_app/saved-filters.ts"),

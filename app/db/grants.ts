@@ -1,9 +1,17 @@
 /**
  * What the plain role may do, table by table; run after every migration, so that a new table without a line here is a table
  * that the application cannot touch. Audit, assessments, raw files, their readings, revisions of a flow and the stresses that films
- * had in use can only be added; what was measured of a film or after a step can be set aside, not taken out.
+ * had in use can only be added, and so is what came with the demo, which only the removal of the demo deletes; what was measured of a film or after a step can be set aside, not taken out.
  */
-const ADD_ONLY = ["assessment", "scan_file", "audit_event", "flow_revision", "scan_reading", "film_stress_in_use"];
+const ADD_ONLY = [
+  "assessment",
+  "scan_file",
+  "audit_event",
+  "flow_revision",
+  "scan_reading",
+  "film_stress_in_use",
+  "demo_record",
+];
 const NEVER_TAKEN_OUT = ["film_stress_value", "step_measurement"];
 const READ_AND_WRITE = [
   "person",

@@ -16,6 +16,7 @@ const PARTS: readonly (readonly [string, MethodPart | null])[] = [
   ["/method", null],
   ["/preferences", part("keys", "keys")],
   ["/search", null],
+  ["/demo", null],
   ["/favourites", null],
   ["/films", part("equations-thin-film", "thin film on a thick wafer")],
   ["/stacks", STACKS],

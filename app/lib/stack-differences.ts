@@ -28,7 +28,7 @@ const nameIn = (list: readonly { id: string; name: string }[], id: string) =>
   id === "" ? NOT_CHOSEN : (list.find((each) => each.id === id)?.name ?? "no longer in the library");
 
 /** A field of a stack or of a film: how it is called, what it says, and the rule that its quantity is read by. */
-interface Part<Of> {
+export interface Part<Of> {
   field: string;
   label: string;
   of: (text: Of) => string;
@@ -51,10 +51,11 @@ function measuredParts<Of>(field: string, what: string, of: (text: Of) => Measur
     part("tolerance", `Tolerance of the ${lower}`, rule),
     part("source", `Source of the ${lower}`),
     part("note", `Remark on the ${lower}`),
+    part("on", `Day of the ${lower}`),
   ];
 }
 
-const STACK_PARTS: Part<StackText>[] = [
+export const STACK_PARTS: Part<StackText>[] = [
   { field: "name", label: "Name", of: ({ name }) => name },
   { field: "note", label: "Note", of: ({ note }) => note },
   {
@@ -71,7 +72,7 @@ const STACK_PARTS: Part<StackText>[] = [
   ),
 ];
 
-const FILM_PARTS: Part<LayerText>[] = [
+export const FILM_PARTS: Part<LayerText>[] = [
   { field: "film", label: "Choice", of: ({ film }) => film, words: (id, { films }) => nameIn(films, id) },
   ...measuredParts<LayerText>("thickness", "Thickness", ({ thickness }) => thickness, RULES.filmThickness),
   ...measuredParts<LayerText>("stress", "Stress for this stack", ({ stress }) => stress, RULES.stress),
@@ -92,7 +93,7 @@ const FILM_PARTS: Part<LayerText>[] = [
 ];
 
 /** Whether two texts say the same: '5um' is '5 µm'. */
-function same(one: string, other: string, rule: QuantityRule | undefined): boolean {
+export function same(one: string, other: string, rule: QuantityRule | undefined): boolean {
   if (one === other) return true;
   if (!rule) return false;
   const [a, b] = [readQuantity(one, rule), readQuantity(other, rule)];
@@ -121,7 +122,7 @@ function partDifferences<Of>(
   });
 }
 
-interface Placed {
+export interface Placed {
   layer: LayerText;
   index: number;
   /** of the film; with its place where the stack holds the same film several times */
@@ -130,7 +131,7 @@ interface Placed {
 }
 
 /** The films with their places. */
-function placed(layers: readonly LayerText[], names: StackNames): Placed[] {
+export function placed(layers: readonly LayerText[], names: StackNames): Placed[] {
   return layers.map((layer, index) => {
     const side = layer.side === "front" ? "device side" : "back side";
     const place = `${index + 1} of ${layers.length}`;
@@ -146,16 +147,19 @@ const sidewise = ({ layer }: Placed) => `${layer.side} ${layer.film}`;
 
 /** The fields in which two states of a stack differ, in the order of the form; empty where both say the same. */
 export function stackDifferences(before: StackText, after: StackText, names: StackNames): StackDifference[] {
-  const films = align(placed(before.layers, names), placed(after.layers, names), [
-    says,
-    sidewise,
-    ({ layer }) => layer.side,
-  ]);
+  const films = pairFilms(placed(before.layers, names), placed(after.layers, names));
   return [
     ...partDifferences(STACK_PARTS, [before, after], names, { key: "", at: "", of: "" }),
-    ...withMoves(films).flatMap((pair) => filmDifferences(pair, names)),
+    ...films.flatMap((pair) => filmDifferences(pair, names)),
   ];
 }
+
+/** The films of two states that are the same film, and those that only one of them has. */
+export const pairFilms = (before: readonly Placed[], after: readonly Placed[]): Meeting[] =>
+  withMoves(align(before, after, [says, sidewise, ({ layer }) => layer.side]));
+
+/** A film as lists name it; with its place where a stack holds the same film several times. */
+export const filmName = ({ name }: Placed): string => name;
 
 type Meeting = Pair<Placed> & { moved?: boolean };
 

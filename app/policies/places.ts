@@ -54,6 +54,12 @@ const WITHIN: (Page & { open: (actor: Actor) => boolean })[] = [
   { name: "Instruments", path: "/instruments", also: "profilometers", open: seesLibrary },
   { name: "Import profiles", path: "/import-profiles", open: (actor) => mayOnSite(actor, "keep import profiles") },
   { name: "Predicted against measured", path: "/predictions", open: seesWork },
+  {
+    name: "The demo",
+    path: "/demo",
+    also: "example data, load, remove",
+    open: (actor) => mayOnSite(actor, "load and remove the demo"),
+  },
   { name: "Work under way", path: "/jobs", also: "jobs", open: seesWork },
 ];
 

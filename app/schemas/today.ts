@@ -53,6 +53,8 @@ export interface TodayView {
   notAssessed: TodayGroup<TodayFlow>;
   scans: ScanRow[];
   programs: TodayProgram[];
+  /** for who may load and remove it: whether the demo is on the site, with its programs that this person belongs to */
+  demo: { here: boolean; programs: string[] } | null;
   /** what the person marked and opened last */
   kept: FoundGroup[];
 }

@@ -17,6 +17,8 @@ export interface Scope {
 export interface ActorScope {
   actor: Actor;
   requestId: string;
+  /** true only where the demo is loaded or taken out */
+  atTheDemo?: boolean;
 }
 
 /** Tells row-level security, for the rest of this transaction, whose data may be seen. */
@@ -42,7 +44,7 @@ export async function inScope<T>(scope: Scope | ActorScope, work: (em: EntityMan
 }
 
 function doorOf(scope: Scope | ActorScope): string {
-  if ("actor" in scope) return "";
+  if ("actor" in scope) return scope.atTheDemo ? "demo" : "";
   if (scope.atTheDoor) return "sign-in";
   return scope.atWork ? "worker" : "";
 }

@@ -2,11 +2,12 @@ import type { EntityManager } from "@mikro-orm/postgresql";
 import { Program } from "#app/db/entities/program.ts";
 import type { Outcome } from "#app/engine/vocabulary.ts";
 import { groupFlows } from "#app/lib/today-groups.ts";
-import { mayInProgram, programsWhere } from "#app/policies/permissions.ts";
+import { mayInProgram, mayOnSite, programsWhere } from "#app/policies/permissions.ts";
 import type { AssessmentResult, StepResult } from "#app/schemas/assessment-result.ts";
 import type { TodayAssessed, TodayFlow, TodayGroup, TodayProgram, TodayView } from "#app/schemas/today.ts";
 import { inScope, type ActorScope } from "#app/server/scope.server.ts";
 import { outOfDateAmong } from "./assessments/out-of-date.server.ts";
+import { demoIsHere, demoPrograms } from "./demo/demo-view.server.ts";
 import { keptGroups } from "./kept/kept-rows.server.ts";
 import { latestScans } from "./scans.server.ts";
 
@@ -29,6 +30,7 @@ export async function todayView(scope: ActorScope): Promise<TodayView> {
       works: works.length > 0,
       mayAssess: programsWhere(actor, "run assessments").length > 0,
       mayUpload: programsWhere(actor, "upload scans").length > 0,
+      demo: mayOnSite(actor, "load and remove the demo") ? await demoOf(em) : null,
       kept: await keptGroups(em, scope),
     };
     if (works.length === 0)
@@ -70,6 +72,10 @@ export async function todayView(scope: ActorScope): Promise<TodayView> {
       ),
     };
   });
+}
+
+async function demoOf(em: EntityManager): Promise<TodayView["demo"]> {
+  return { here: await demoIsHere(em), programs: (await demoPrograms(em)).map(({ name }) => name) };
 }
 
 function programRow(

@@ -287,6 +287,47 @@ test.describe("of two who change one stack", () => {
     await expect(field(page, "layers[0].thickness.value")).toHaveValue("8 µm");
   });
 
+  test("puts both together row by row, and saves it on top of the other's", async ({ page, browser }) => {
+    const alert = await inConflict(page, await browser.newPage(), "merged");
+    const merge = alert.getByRole("button", { name: "Save merged" });
+    await merge.click();
+    await expect(alert.getByText(/Choose yours or theirs first: Remaining silicon/)).toBeVisible();
+    const theirs = alert.getByRole("radio", { name: "Remaining silicon: theirs, 550 µm" });
+    const mine = alert.getByRole("radio", { name: "Remaining silicon: yours, 500 µm" });
+    await expect(mine).toBeFocused();
+    await expect(alert.getByRole("radio", { name: /^Thickness of Polymer .*: yours/ })).toBeChecked();
+    await page.keyboard.press("ArrowRight");
+    await expect(theirs).toBeChecked();
+    await expectNoAxeFindings(page);
+
+    await alert.getByRole("button", { name: "Put into the fields" }).click();
+    await expect(alert).toHaveCount(0);
+    await expect(field(page, "siliconThickness.value")).toHaveValue("550 µm");
+    await expect(field(page, "layers[0].thickness.value")).toHaveValue("8 µm");
+    await button(page, "Undo").click();
+    await expect(field(page, "siliconThickness.value")).toHaveValue("500 µm");
+    await button(page, "Redo").click();
+
+    // A third one saves meanwhile: what was put together is held against that.
+    const third = await browser.newPage();
+    await signIn(third, "process owner");
+    await third.goto(new URL(page.url()).pathname);
+    const name = nameFor("third");
+    await field(third, "name").fill(name);
+    await save(third).click();
+    await expect(third.getByRole("heading", { level: 1, name })).toBeVisible();
+    await third.context().close();
+    await save(page).click();
+    await expect(alert.getByRole("row", { name: /^Name/ })).toContainText("they did");
+    await merge.click();
+    await expect(alert).toHaveCount(0);
+    await expect(page.getByText(/Last changed .*Ines Varga/)).toBeVisible();
+    await page.reload();
+    await expect(field(page, "siliconThickness.value")).toHaveValue("550 µm");
+    await expect(field(page, "layers[0].thickness.value")).toHaveValue("8 µm");
+    await expect(field(page, "name")).toHaveValue(name);
+  });
+
   test("may take the other's, and have the own back by undo", async ({ page, browser }) => {
     const alert = await inConflict(page, await browser.newPage(), "theirs");
     await alert.getByRole("button", { name: "Take theirs" }).click();

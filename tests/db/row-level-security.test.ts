@@ -40,6 +40,7 @@ const SITE_TABLES = [
   "reference_reading",
   "film_stress_value",
   "film_stress_in_use",
+  "demo_record",
 ];
 
 /** What a person keeps for themselves. */

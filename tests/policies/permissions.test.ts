@@ -31,6 +31,7 @@ const SITE_TABLE: Record<keyof typeof SITE_PERMISSIONS, string> = {
   "keep import profiles": "   - y y y y -",
   "check instruments": "   - y y y y -",
   "edit carriers, bonds and limits": "- - - - y y",
+  "load and remove the demo": "- - - - y -",
   "see the audit trail": "- - - - - y",
 };
 

@@ -95,3 +95,37 @@ test("a foreign or made-up id is not there, in the same words", async () => {
   const sentence = (answers[0] as { data: unknown }).data;
   for (const answer of answers) expect(answer).toMatchObject({ init: { status: 404 }, data: sentence });
 });
+
+test("the form of a film is told, property by property, what somebody else has saved meanwhile", async () => {
+  const { getLibraryRecord, saveLibraryRecord } = await library();
+  const { saveLibraryForm } = await import("#app/services/library/library-form.server.ts");
+  const [engineer, owner] = [await scopeOfPerson(database, "engineer"), await scopeOfPerson(database, "process-owner")];
+  const created = await saveLibraryRecord(engineer, "film", newFilm("In two hands"));
+  if (created.outcome !== "saved") throw new Error("not created");
+  const { stamp } = await getLibraryRecord(engineer, "film", created.id);
+  const changed = { ...newFilm("In two hands").values, note: "theirs", stress: measured(45e6, 2e6, "measured here") };
+  await saveLibraryRecord(owner, "film", { id: created.id, version: stamp.version, values: changed });
+  const text = (value: string, tolerance = "", source = "supplier") => ({ value, tolerance, source });
+  const typed = {
+    stress: text("30 MPa", "3 MPa", "measured here"),
+    youngsModulus: text("3 GPa"),
+    poissonsRatio: text("0.35"),
+    expansion: text("40 ppm/K"),
+  };
+  const body = new FormData();
+  for (const [name, parts] of Object.entries(typed))
+    for (const [part, said] of Object.entries(parts)) body.append(`${name}.${part}`, said);
+  for (const [name, said] of Object.entries({ name: "In two hands", kind: "polymer", note: "mine", stressState: "" }))
+    body.append(name, said);
+  body.append("version", String(stamp.version));
+  const request = new Request("http://127.0.0.1/films", { method: "POST", body });
+  const answer = await saveLibraryForm(request, engineer, "film", { id: created.id, list: "/films" });
+  const told: unknown = JSON.parse(JSON.stringify(answer.data.conflict).replaceAll("\u00A0", " "));
+  expect(told).toEqual({
+    by: owner.actor.name,
+    rows: [
+      { label: "Stress", theirs: "45.0 ± 2.0 MPa, measured here", mine: "30.0 ± 3.0 MPa, measured here" },
+      { label: "Note", theirs: "theirs", mine: "mine" },
+    ],
+  });
+});

@@ -23,6 +23,7 @@ import { focusField, STACK_FORM } from "./stack-fields.ts";
 import { StackPanes } from "./StackPanes.tsx";
 import type { CutPartOf } from "./stack-cut-layers.ts";
 import { useKeptDraft } from "./use-kept-draft.ts";
+import { useSaveOnceSaid } from "./use-save-once-said.ts";
 import { useLayerEdits } from "./use-layer-edits.ts";
 import { useLiveEstimate } from "./use-live-estimate.ts";
 import { useSelectedLayer } from "./use-selected-layer.ts";
@@ -111,6 +112,7 @@ export function StackEditor(props: Props) {
     putInto(form, [typed, stackText(by)], selection, true);
     setWords(what);
   };
+  const saveOnceSaid = useSaveOnceSaid(said);
   const takeDraft = (found: KeptDraft) => {
     kept.settle(found);
     replace(textOf(found.said), { text: textOf(found.opened), version: found.version }, "The draft is taken up");
@@ -118,6 +120,11 @@ export function StackEditor(props: Props) {
   const takeTheirs = ({ by, theirs, version }: Conflict) => {
     setSettled(props.conflict ?? null);
     replace(theirs, { text: theirs, version }, `The stack is as ${by} saved it`);
+  };
+  const takeMerged = ({ by, theirs, version }: Conflict, merged: StackText, save: boolean) => {
+    setSettled(props.conflict ?? null);
+    replace(merged, { text: theirs, version }, `Yours and what ${by} saved are put together`);
+    if (save) saveOnceSaid(JSON.stringify(stackText(merged)));
   };
   const goTo = ({ field }: DraftFault) => {
     const film = filmOf(field);
@@ -159,6 +166,7 @@ export function StackEditor(props: Props) {
               names={choices}
               address={`/stacks/${stackId ?? ""}`}
               onTakeTheirs={() => takeTheirs(conflict)}
+              onMerge={(merged, save) => takeMerged(conflict, merged, save)}
             />
           ) : (
             <FormHead lastResult={lastResult === null || props.conflict ? null : lastResult} />

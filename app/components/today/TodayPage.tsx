@@ -4,17 +4,25 @@ import { headline } from "#app/lib/today-groups.ts";
 import { lyingAs } from "#app/lib/lying-as.ts";
 import type { ScanRow } from "#app/schemas/scan-view.ts";
 import type { TodayAssessed, TodayFlow, TodayView } from "#app/schemas/today.ts";
+import { LoadDemo } from "#app/components/demo/LoadDemo.tsx";
 import { FirstSteps } from "./FirstSteps.tsx";
 import { TodayAssessedRow } from "./TodayAssessedRow.tsx";
+import { DemoTold, TodayDemo } from "./TodayDemo.tsx";
 import { TodayHead } from "./TodayHead.tsx";
 import { TodayPrograms } from "./TodayPrograms.tsx";
 import { TodayRow } from "./TodayRow.tsx";
 import { TodayScans } from "./TodayScans.tsx";
 import { TodaySection } from "./TodaySection.tsx";
 
+interface Props {
+  view: TodayView;
+  /** what the address says has happened to the demo */
+  told: string | null;
+}
+
 /** Today for somebody who sees the work of a program: what waits, newest scans, programs. */
-export function TodayPage({ view }: { view: TodayView }) {
-  const { decisions, outOfDate, notAssessed, programs, mayAssess } = view;
+export function TodayPage({ view, told }: Props) {
+  const { decisions, outOfDate, notAssessed, programs, mayAssess, demo } = view;
   const flows = programs.reduce((sum, program) => sum + program.flows, 0);
   const stacks = programs.reduce((sum, program) => sum + program.stacks, 0);
   const exaggeration = exaggerationOf([...decisions.rows, ...outOfDate.rows], view.scans);
@@ -22,12 +30,14 @@ export function TodayPage({ view }: { view: TodayView }) {
   return (
     <>
       <TodayHead sentence={flows === 0 ? "Nothing has been assessed yet." : headline(view)} now={view.now} />
+      {demo && <DemoTold told={told} here={demo.here} />}
       <div className="grid gap-x-12 gap-y-6 wide:grid-cols-[minmax(0,1fr)_384px]">
         <div className="min-w-0">
           {!mayAssess && scans}
           {flows === 0 && (
-            <div className="mb-6">
+            <div className="mb-6 space-y-6">
               <FirstSteps stacks={stacks} scans={view.scans.length} mayAssess={mayAssess} mayUpload={view.mayUpload} />
+              {demo?.here === false && <LoadDemo />}
             </div>
           )}
           {decisions.total > 0 && (
@@ -76,6 +86,7 @@ export function TodayPage({ view }: { view: TodayView }) {
         <div className="space-y-6">
           <KeptSections groups={view.kept} />
           <TodayPrograms programs={programs} works />
+          {demo && demo.programs.length > 0 && <TodayDemo programs={demo.programs} />}
         </div>
       </div>
     </>

@@ -4,6 +4,7 @@ import { BondingMaterial } from "./bonding-material.ts";
 import { Carrier } from "./carrier.ts";
 import { CarrierUnit } from "./carrier-unit.ts";
 import { Credential } from "./credential.ts";
+import { DemoRecord } from "./demo-record.ts";
 import { Equipment } from "./equipment.ts";
 import { Favourite } from "./favourite.ts";
 import { Film } from "./film.ts";
@@ -84,5 +85,6 @@ export const entities = [
   Favourite,
   SavedFilter,
   Preference,
+  DemoRecord,
   AuditEvent,
 ];

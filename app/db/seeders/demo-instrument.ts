@@ -18,8 +18,11 @@ const REPEATS = [-4.02, -3.87, -4.11, -3.95, -4.06, -3.9, -4.15, -3.98, -4.04, -
 const WEEKS = [-45.12, -45.31, -45.05, -45.22, -45.4, -45.17, -45.35, -45.28];
 const KNOWN = -45.2;
 
-/** The profilometer of the pilot line: how it repeats, and what it has read on a wafer of known bow. */
-export function addDemoInstrument(em: EntityManager, person: Person): void {
+const REFERENCE = "R-07 of 2026";
+
+/** The profilometer of the pilot line: how it repeats, and what it has read on a wafer of known bow. Those of their names stay as they are. */
+export async function addDemoInstrument(em: EntityManager, person: Person): Promise<void> {
+  if (await em.findOne(ImportProfile, { name: DEMO_INSTRUMENT })) return;
   const now = new Date();
   const made = { createdAt: now, createdBy: person };
   const profile = em.create(ImportProfile, {
@@ -44,15 +47,17 @@ export function addDemoInstrument(em: EntityManager, person: Person): void {
     engineVersion: ENGINE_VERSION,
     ...made,
   });
-  const wafer = em.create(ReferenceWafer, {
-    id: randomUUID(),
-    name: "R-07 of 2026",
-    bow: KNOWN * 1e-6,
-    bowUncertainty: 0.15e-6,
-    diameter: DIAMETER,
-    note: "Certificate of the site’s metrology room",
-    ...made,
-  });
+  const wafer =
+    (await em.findOne(ReferenceWafer, { name: REFERENCE })) ??
+    em.create(ReferenceWafer, {
+      id: randomUUID(),
+      name: REFERENCE,
+      bow: KNOWN * 1e-6,
+      bowUncertainty: 0.15e-6,
+      diameter: DIAMETER,
+      note: "Certificate of the site’s metrology room",
+      ...made,
+    });
   WEEKS.forEach((bow, week) =>
     em.create(ReferenceReading, {
       id: randomUUID(),

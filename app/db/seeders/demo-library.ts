@@ -26,9 +26,17 @@ function handlingOf({ stands, attackedBy = [], vacuumLimit, weightLoss }: DemoBo
   };
 }
 
+type Named = typeof Film | typeof Carrier | typeof Tape | typeof BondingMaterial;
+
+/** What the site has no record of that name of yet; one that is there is used as it is. */
+async function missing<Row extends { name: string }>(em: EntityManager, entity: Named, rows: readonly Row[]) {
+  const there = new Set((await em.findAll(entity as typeof Film)).map(({ name }) => name));
+  return rows.filter(({ name }) => !there.has(name));
+}
+
 /** Films, carriers and bonding materials of the invented pilot line. */
-export function addDemoLibrary(em: EntityManager): void {
-  for (const film of DEMO_FILMS) {
+export async function addDemoLibrary(em: EntityManager): Promise<void> {
+  for (const film of await missing(em, Film, DEMO_FILMS)) {
     const on = film.source === "measured here" ? MEASURED_ON : null;
     const property = (value: number, tolerance: number | null) =>
       measured(value, tolerance, film.source, film.note, on);
@@ -51,7 +59,7 @@ export function addDemoLibrary(em: EntityManager): void {
       },
     });
   }
-  for (const carrier of DEMO_CARRIERS) {
+  for (const carrier of await missing(em, Carrier, DEMO_CARRIERS)) {
     const property = (value: number, tolerance: number | null) => measured(value, tolerance, "supplier");
     const kind = em.create(Carrier, {
       ...delivered(),
@@ -79,8 +87,8 @@ export function addDemoLibrary(em: EntityManager): void {
     for (const piece of carrier.pieces ?? [])
       em.create(CarrierUnit, { ...delivered(), carrier: kind, thicknessVariation: null, ...piece });
   }
-  for (const tape of DEMO_TAPES) em.create(Tape, { ...delivered(), ...tape });
-  for (const material of DEMO_BONDING_MATERIALS) {
+  for (const tape of await missing(em, Tape, DEMO_TAPES)) em.create(Tape, { ...delivered(), ...tape });
+  for (const material of await missing(em, BondingMaterial, DEMO_BONDING_MATERIALS)) {
     const property = (value: number, tolerance: number | null) => measured(value, tolerance, "supplier");
     em.create(BondingMaterial, {
       ...delivered(),

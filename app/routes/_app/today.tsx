@@ -6,11 +6,11 @@ import type { Route } from "./+types/today";
 
 export const meta: Route.MetaFunction = () => [{ title: "Today · Planeward" }];
 
-export async function loader({ context }: Route.LoaderArgs) {
-  return { view: await todayView(scopeOf(context)) };
+export async function loader({ context, url }: Route.LoaderArgs) {
+  return { view: await todayView(scopeOf(context)), told: url.searchParams.get("demo") };
 }
 
 export default function Today({ loaderData }: Route.ComponentProps) {
-  const { view } = loaderData;
-  return view.works ? <TodayPage view={view} /> : <TodayForGuest view={view} />;
+  const { view, told } = loaderData;
+  return view.works ? <TodayPage view={view} told={told} /> : <TodayForGuest view={view} />;
 }

@@ -4,6 +4,9 @@ import { bondingMaterialSchema } from "#app/schemas/bonding-material.ts";
 import { carrierSchema } from "#app/schemas/carrier.ts";
 import { equipmentSchema } from "#app/schemas/equipment.ts";
 import { filmSchema } from "#app/schemas/film.ts";
+import { filmChanges } from "#app/lib/film-csv/changes.ts";
+import type { RecordConflict } from "#app/lib/record-conflict.ts";
+import type { FilmValues } from "#app/schemas/film.ts";
 import type { LibraryKey } from "#app/schemas/library-records.ts";
 import { siliconSchema } from "#app/schemas/silicon.ts";
 import { tapeSchema } from "#app/schemas/tape.ts";
@@ -11,7 +14,8 @@ import { readForm, refusal, versionOf } from "#app/server/form.server.ts";
 import type { ActorScope } from "#app/server/scope.server.ts";
 import { requireOnSite } from "../permission.server.ts";
 import { LIBRARY } from "./kinds.server.ts";
-import { saveLibraryRecord } from "./library.server.ts";
+import type { Saved } from "../record.server.ts";
+import { getLibraryRecord, saveLibraryRecord } from "./library.server.ts";
 
 const SCHEMAS: Record<LibraryKey, z.ZodType<{ name: string }>> = {
   film: filmSchema,
@@ -40,10 +44,30 @@ export async function saveLibraryForm(
   const version = versionOf(formData);
   // What was read with an older version stays of that version until the person has been told of the newer one.
   if (submission.status !== "success")
-    return data({ ...refusal(submission, null, what), version, savedAs: null }, { status: 400 });
+    return data({ ...refusal(submission, null, what), version, savedAs: null, conflict: null }, { status: 400 });
   const saved = await saveLibraryRecord(scope, key, { id, version, values: submission.value });
-  if (saved.outcome === "saved" && stay) return data({ lastResult: null, version: null, savedAs: saved.id });
+  if (saved.outcome === "saved" && stay)
+    return data({ lastResult: null, version: null, savedAs: saved.id, conflict: null });
   if (saved.outcome === "saved") throw redirect(`${list}/${saved.id}`);
   const answer = refusal(submission, saved, what);
-  return data({ ...answer, version: answer.version ?? version, savedAs: null }, { status: 409 });
+  const conflict = await conflictWith(scope, key, id, submission.value, saved);
+  return data({ ...answer, version: answer.version ?? version, savedAs: null, conflict }, { status: 409 });
+}
+
+/** What somebody else has saved meanwhile beside what was sent, property by property; for films, whose properties have words. */
+async function conflictWith(
+  scope: ActorScope,
+  key: LibraryKey,
+  id: string | null,
+  values: unknown,
+  saved: Saved,
+): Promise<RecordConflict | null> {
+  if (saved.outcome !== "conflict" || key !== "film" || id === null) return null;
+  const { record, stamp } = await getLibraryRecord(scope, "film", id);
+  const rows = filmChanges(record, values as FilmValues).map(({ label, from, to }) => ({
+    label: label.charAt(0).toUpperCase() + label.slice(1),
+    theirs: from,
+    mine: to,
+  }));
+  return { by: stamp.updatedBy, rows };
 }

@@ -19,6 +19,7 @@ const EMPTY: TodayView = {
   scans: [],
   programs: [PROGRAM],
   kept: [],
+  demo: null,
 };
 const ASSESSED: TodayAssessed = {
   id: "flow",
@@ -33,8 +34,12 @@ const ASSESSED: TodayAssessed = {
 };
 
 function shown(view: TodayView): string {
-  const Page = view.works ? TodayPage : TodayForGuest;
-  const Stub = createRoutesStub([{ path: "/", Component: () => <Page view={view} /> }]);
+  const Stub = createRoutesStub([
+    {
+      path: "/",
+      Component: () => (view.works ? <TodayPage view={view} told={null} /> : <TodayForGuest view={view} />),
+    },
+  ]);
   return render(<Stub initialEntries={["/"]} />);
 }
 const text = (view: TodayView) => words(shown(view)).replaceAll("\u00A0", " ");

@@ -35,6 +35,7 @@ export default function EditFilm({ loaderData, actionData }: Route.ComponentProp
         record={record}
         version={actionData?.version ?? stamp.version}
         lastResult={actionData?.lastResult}
+        conflict={actionData?.conflict}
         back={back}
       />
     </>
