@@ -6,7 +6,7 @@ const KINDS = `('program', 'person', 'stack', 'flow', 'assessment', 'scan_file',
   'carrier_unit', 'bonding_material', 'tape', 'import_profile', 'repeatability_study', 'reference_wafer', 'reference_reading')`;
 
 const DEMO_PROGRAMS = `select d.id from demo_record d where d.kind = 'program'`;
-const definer = "security definer set search_path = public";
+const definer = "security definer set search_path = public, pg_temp";
 
 /** Records of the library that are chosen by id within JSON, where no foreign key holds on to them. */
 const IN_JSON = [
