@@ -60,7 +60,7 @@ export function warpChart(room: Estimated, { hot, overlay }: ChartOthers, limits
   const series: Series[] = [
     {
       id: "drawn",
-      label: "as drawn, 25 °C",
+      label: "as drawn, 25\u00A0°C",
       dash: "solid",
       marker: "circle",
       colourToken: "silicon",

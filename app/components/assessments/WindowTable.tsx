@@ -23,7 +23,7 @@ export function WindowTable({ drawing: { table, tableX }, x, y }: Props) {
               <td />
               {tableX.map((value) => (
                 <th key={value} scope="col" className="whitespace-nowrap">
-                  {figure(value)} {x.unit}
+                  {figure(value)}&nbsp;{x.unit}
                 </th>
               ))}
             </tr>
@@ -32,7 +32,7 @@ export function WindowTable({ drawing: { table, tableX }, x, y }: Props) {
             {table.map((row) => (
               <tr key={row.y}>
                 <th scope="row" className="whitespace-nowrap">
-                  {figure(row.y)} {y.unit}
+                  {figure(row.y)}&nbsp;{y.unit}
                 </th>
                 {row.cells.map(({ outcome, margin }, index) => (
                   <td key={tableX[index] ?? index}>

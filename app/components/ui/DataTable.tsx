@@ -1,6 +1,7 @@
 import type { ReactNode } from "react";
 import { Link, useSearchParams } from "react-router";
 import { PAGE_SIZE, withParams, type ListPage } from "#app/lib/list-params.ts";
+import { OwnFigure, OwnHead } from "#app/components/units/OwnFigure.tsx";
 
 export interface Column<Row> {
   key: string;
@@ -52,7 +53,11 @@ export function DataTable<Row>({ caption, columns, page, rowKey }: Props<Row>) {
                     ) : (
                       column.head
                     )}
-                    {column.unit && <span className="block font-normal text-quiet">{column.unit}</span>}
+                    {column.unit && (
+                      <span className="block font-normal text-quiet">
+                        <OwnHead unit={column.unit} />
+                      </span>
+                    )}
                   </th>
                 );
               })}
@@ -63,7 +68,7 @@ export function DataTable<Row>({ caption, columns, page, rowKey }: Props<Row>) {
               <tr key={rowKey(row)}>
                 {columns.map((column) => (
                   <td key={column.key} className={align(column)}>
-                    {column.cell(row)}
+                    {column.unit ? <OwnFigure unit={column.unit}>{column.cell(row)}</OwnFigure> : column.cell(row)}
                   </td>
                 ))}
               </tr>
