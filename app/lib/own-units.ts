@@ -111,9 +111,9 @@ export function inOwnUnits(text: string, units: OwnUnits): string {
   );
 }
 
-const BARE = new RegExp(`${BEFORE}(${NUMBER})${SPREAD}(?![\\w.]|\\u00A0(?:mm|nm))`, "gu");
+const BARE = new RegExp(`${BEFORE}(${NUMBER})${SPREAD}(?![\\w.]|\\u00A0(?!±|to\\b))`, "gu");
 
-/** Figures that stand without their unit, because the head of their column names it: '343 ± 120', '10 to 40'. */
+/** Figures that stand without their unit, because the head of their column names it: '343 ± 120', '10 to 40'. Others have their own. */
 export function bareInOwnUnits(text: string, symbol: string, units: OwnUnits): string {
   const change = changeOf(symbol, units);
   if (!change) return text;
@@ -148,7 +148,7 @@ function rewritten(shown: string, { dimension, from, to }: UnitChange, style: St
   const last = decimalsFor(10 ** -place * scale);
   // The zero of degrees is no beginning to count digits from: whole ones stay whole.
   const least = own === 0 || exactly || dimension === "temperature" ? 0 : LEAST_DIGITS - 1 - magnitude(own);
-  const decimals = own === 0 && place === 0 ? 0 : Math.max(0, last, least);
+  const decimals = own === 0 && place === 0 && !exactly ? 0 : Math.max(0, last, least);
   return formatNumber(own, { decimals, sign: shown.startsWith("+") });
 }
 

@@ -113,7 +113,7 @@ export const shortened = (name: string) =>
 export function limitLines(diameter: number, limits: SiteLimits): PlotLimit[] {
   const keys = thicknessLimits(diameter);
   if (!keys) return [];
-  const line = (value: number, words: string) => ({ value, lines: [words, `below ${Math.round(value * 1e6)}`] });
+  const line = (value: number, words: string) => ({ value, lines: [words, `below ${limitWords(value)}`] });
   return [
     line(limits.carrierBelow.value, "carrier"),
     line(limits[keys.gripper].value, "tape or ring"),

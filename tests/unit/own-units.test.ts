@@ -129,6 +129,7 @@ describe("columns whose head names the unit", () => {
     ["–", "µm", "–"],
     ["clear below 200", "°C", "clear below 392"],
     ["8 mm", "µm", "8 mm"],
+    ["0 ± 200", "MPa", "0.0 ± 29.0"],
   ])("shows %s of %s as %s", (text, symbol, expected) =>
     expect(bareInOwnUnits(text.replace(" mm", `${N}mm`), symbol, OWN).replace(N, " ")).toBe(expected),
   );

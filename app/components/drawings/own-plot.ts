@@ -52,7 +52,8 @@ const suffix = ({ symbol }: OwnScale, ticks: readonly PlotTick[]) =>
 function linearTicks(axis: PlotAxis, scale: OwnScale) {
   const [first, second] = axis.ticks;
   if (first === undefined || second === undefined) return {};
-  const step = niceStep(scale.step(second.value - first.value));
+  // A little finer than delivered: the next round step may be twice as wide and leave too few.
+  const step = niceStep(0.6 * scale.step(second.value - first.value));
   const after = suffix(scale, axis.ticks);
   return {
     ticks: multiples(step, scale.of(axis.from), scale.of(axis.to)).map((value) => tick(axis, scale, value, after)),

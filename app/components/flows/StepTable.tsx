@@ -166,7 +166,9 @@ function Row({ row, href, current, actions, more, handle, look }: RowProps) {
         <div className="tablet:hidden">
           <p className="text-label text-quiet">
             {slots && `${slots}: `}
-            {silicon.text}&nbsp;µm, {peak}&nbsp;°C{minutes && `, ${minutes}`}, {planned}
+            {silicon.text}&nbsp;µm, <OwnFigure unit="°C">{peak}</OwnFigure>&nbsp;
+            <OwnHead unit="°C" />
+            {minutes && `, ${minutes}`}, {planned}
             {bond && `: ${noBreak(bond)}`}
             {tool === null && <>, {toolWords}</>}
             {run && `, ${run}`}

@@ -1,7 +1,7 @@
 import type { ReactNode } from "react";
 import { Link, useSearchParams } from "react-router";
 import { PAGE_SIZE, withParams, type ListPage } from "#app/lib/list-params.ts";
-import { OwnFigure, OwnHead } from "#app/components/units/OwnFigure.tsx";
+import { OwnFigure, OwnHead, useOwnText } from "#app/components/units/OwnFigure.tsx";
 
 export interface Column<Row> {
   key: string;
@@ -25,6 +25,7 @@ interface Props<Row> {
 /** A list that sorts by its heads and pages at its foot, both through the address. */
 export function DataTable<Row>({ caption, columns, page, rowKey }: Props<Row>) {
   const { params, rows, total } = page;
+  const own = useOwnText();
   const [search] = useSearchParams();
   const align = ({ numeric, wide }: Column<Row>) =>
     `${numeric ? "num" : ""} ${wide ? "max-tablet:hidden print:table-cell" : ""}`;
@@ -47,7 +48,7 @@ export function DataTable<Row>({ caption, columns, page, rowKey }: Props<Row>) {
                         className="text-inherit no-underline"
                         preventScrollReset
                       >
-                        {column.head}
+                        {own(column.head)}
                         {current && <SortSign descending={params.descending} />}
                       </Link>
                     ) : (
