@@ -15,7 +15,7 @@ export const preferencesSchema: z.ZodType<Preferences> = z.object({
   decimalMark: z.enum(DECIMAL_MARKS).catch(delivered.decimalMark),
 });
 
-/** The same from a form, where a box that is not ticked is not sent. */
+/** The same from a form, where a box that is not ticked is not sent. What a form does not ask stays as it was. */
 export const preferencesFormSchema = z.object({
   theme: z.enum(THEMES, "Choose one of the themes."),
   density: z.enum(DENSITIES, "Choose one of the densities."),
@@ -23,8 +23,8 @@ export const preferencesFormSchema = z.object({
     .literal("on")
     .optional()
     .transform((ticked) => ticked === "on"),
-  length: z.enum(LENGTH_UNITS, "Choose one of the units of length."),
-  stress: z.enum(STRESS_UNITS, "Choose one of the units of stress."),
-  temperature: z.enum(TEMPERATURE_UNITS, "Choose one of the units of temperature."),
-  decimalMark: z.enum(DECIMAL_MARKS, "Choose one of the decimal marks."),
+  length: z.enum(LENGTH_UNITS, "Choose one of the units of length.").optional(),
+  stress: z.enum(STRESS_UNITS, "Choose one of the units of stress.").optional(),
+  temperature: z.enum(TEMPERATURE_UNITS, "Choose one of the units of temperature.").optional(),
+  decimalMark: z.enum(DECIMAL_MARKS, "Choose one of the decimal marks.").optional(),
 });
