@@ -1,6 +1,6 @@
 import { memo, type ReactNode } from "react";
 import { WarpChart } from "#app/components/charts/WarpChart.tsx";
-import { useMine } from "#app/components/kept/use-mine.ts";
+import { useCsvMark } from "#app/components/units/own-units-context.ts";
 import type { SiteLimits } from "#app/engine/rules/limits.ts";
 import { warpChart, type ChartOthers } from "#app/lib/stack-chart.ts";
 import { stackCsv } from "#app/lib/stack-csv.ts";
@@ -38,7 +38,7 @@ const CsvLink = memo(function CsvLink({
   panel: { room, hot },
   overlay,
 }: Pick<Props, "name" | "panel" | "overlay">) {
-  const mark = useMine()?.preferences.decimalMark;
+  const mark = useCsvMark();
   return (
     <a
       href={dataAddress(stackCsv(name, room, { hot, overlay }, mark))}
