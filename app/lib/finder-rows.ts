@@ -3,7 +3,7 @@ import type { FinderRow } from "#app/schemas/finder.ts";
 import type { ListPage, ListParams } from "#app/lib/list-params.ts";
 import { figureText, micrometres } from "./assessment-figure.ts";
 import { PAGE_SIZE } from "./list-params.ts";
-import { csvCell } from "./stack-csv.ts";
+import { csvOf, type CsvMark } from "./csv.ts";
 
 export const FINDER_SORTS = ["rank", "carrier", "material", "thickness", "margin"] as const;
 
@@ -87,7 +87,7 @@ const HEAD = [
 ];
 
 /** The finder's rows as CSV with a point as decimal mark; text that a spreadsheet would run as a formula is defused. */
-export function finderCsv(rows: readonly FinderRow[]): string {
+export function finderCsv(rows: readonly FinderRow[], mark?: CsvMark): string {
   const cells = rows.map(({ carrier, material, release, thickness, planned, fits, margin, tightest, reason }) => [
     carrier,
     material,
@@ -103,5 +103,5 @@ export function finderCsv(rows: readonly FinderRow[]): string {
     reason?.figure ?? "",
     reason?.limit ?? "",
   ]);
-  return [HEAD, ...cells].map((row) => `${row.map(csvCell).join(",")}\r\n`).join("");
+  return csvOf([HEAD, ...cells], mark);
 }

@@ -39,7 +39,7 @@ const OTHER: Record<string, InputProperty> = {
   planned: { label: "Support planned" },
   siliconAfter: { label: "Silicon after it", dimension: "length", unit: "µm" },
   groundFaceForce: { label: "Ground face force", dimension: "forcePerLength", unit: "N/m", sign: true },
-  stress: { label: "Stress at 25 °C", dimension: "stress", unit: "MPa", sign: true },
+  stress: { label: "Stress at 25\u00A0°C", dimension: "stress", unit: "MPa", sign: true },
   thickness: { label: "Thickness", dimension: "length", unit: "µm" },
   coverage: { label: "Area coverage", dimension: "fraction", unit: "%" },
   side: { label: "Side" },

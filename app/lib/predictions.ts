@@ -1,7 +1,7 @@
 import { predictedAgainstMeasured, type Parity } from "#app/engine/profile/lot-figures/predicted-against-measured.ts";
 import type { Predicted, PredictionGroup, PredictionPoint } from "#app/schemas/prediction.ts";
 import { PAGE_SIZE, type ListPage, type ListParams } from "./list-params.ts";
-import { csvCell } from "./stack-csv.ts";
+import { csvOf, type CsvMark } from "./csv.ts";
 
 /** Names of the columns that the points sort by; the first is the default. */
 export const PREDICTION_SORTS = ["measured", "off", "group", "name", "predicted", "value", "program"] as const;
@@ -66,7 +66,7 @@ const UNITS: Record<Predicted, { unit: string; perSi: number }> = {
 };
 
 /** Points as CSV with a point as decimal mark; uncertainties are standard ones. */
-export function predictionsCsv(of: Predicted, points: readonly PredictionPoint[]): string {
+export function predictionsCsv(of: Predicted, points: readonly PredictionPoint[], mark?: CsvMark): string {
   const { unit, perSi } = UNITS[of];
   const head = [
     of === "bow" ? "step" : "film",
@@ -93,5 +93,5 @@ export function predictionsCsv(of: Predicted, points: readonly PredictionPoint[]
     scaled(point.measuredUncertainty),
     point.stated ? "yes" : "no",
   ]);
-  return [head, ...rows].map((cells) => `${cells.map(csvCell).join(",")}\r\n`).join("");
+  return csvOf([head, ...rows], mark);
 }

@@ -1,14 +1,15 @@
+import { csvOf, type CsvMark } from "./csv.ts";
 import type { ReadProfileFigures } from "#app/schemas/scan-reading.ts";
 
 /** A profile with the points of its file, where it is known that there were more than are kept. */
-type KeptProfile = Pick<ReadProfileFigures, "along" | "x" | "z"> & Partial<Pick<ReadProfileFigures, "points">>;
+export type KeptProfile = Pick<ReadProfileFigures, "along" | "x" | "z"> & Partial<Pick<ReadProfileFigures, "points">>;
 
 /**
  * What is kept of profiles as a file that is read back without a question and without a change, to the last bit: positions and heights
  * in metres, a pair of columns each, blank where one profile is longer than the other. A remark above says of which the means are kept.
  * Nothing of the file's own words goes in, so no cell is a formula.
  */
-export function profilesCsv(profiles: KeptProfile[]): string {
+export function profilesCsv(profiles: KeptProfile[], mark?: CsvMark): string {
   const heads = profiles.flatMap(({ along }, n) => [
     `${along === "radius" ? "Radius" : "Position"} ${n + 1} [m]`,
     `Height ${n + 1} [m]`,
@@ -19,10 +20,6 @@ export function profilesCsv(profiles: KeptProfile[]): string {
       : [],
   );
   const rows = Math.max(0, ...profiles.map(({ x }) => x.length));
-  const lines = Array.from({ length: rows }, (_, row) =>
-    profiles.map(({ x, z }) => `${cell(x[row])},${cell(z[row])}`).join(","),
-  );
-  return [...remarks, heads.join(","), ...lines].map((line) => `${line}\r\n`).join("");
+  const lines = Array.from({ length: rows }, (_, row) => profiles.flatMap(({ x, z }) => [x[row] ?? "", z[row] ?? ""]));
+  return `${remarks.map((line) => `${line}\r\n`).join("")}${csvOf([heads, ...lines], mark)}`;
 }
-
-const cell = (value: number | undefined) => (value === undefined ? "" : String(value));

@@ -72,11 +72,13 @@ function shapeRemarks({ understatedBy, quartic }: ScanResult): (ScanRemark | nul
 function handlingRemarks({ siliconThickness }: ScanParameters): (ScanRemark | null)[] {
   return [
     siliconThickness < CONTACT_FROM
-      ? caution("Silicon below 300 µm: a stylus presses it out of shape. Scan without contact, or on thicker silicon.")
+      ? caution(
+          "Silicon below 300\u00A0µm: a stylus presses it out of shape. Scan without contact, or on thicker silicon.",
+        )
       : null,
     siliconThickness < STANDARDS_FROM
       ? caution(
-          "Silicon below about 100 µm is outside the scope of the standards for bow and warp, SEMI MF534 and MF1390: say how it was held when you quote the figure.",
+          "Silicon below about 100\u00A0µm is outside the scope of the standards for bow and warp, SEMI MF534 and MF1390: say how it was held when you quote the figure.",
         )
       : null,
   ];

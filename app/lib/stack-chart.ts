@@ -60,7 +60,7 @@ export function warpChart(room: Estimated, { hot, overlay }: ChartOthers, limits
   const series: Series[] = [
     {
       id: "drawn",
-      label: "as drawn, 25 °C",
+      label: "as drawn, 25\u00A0°C",
       dash: "solid",
       marker: "circle",
       colourToken: "silicon",
@@ -113,7 +113,7 @@ export const shortened = (name: string) =>
 export function limitLines(diameter: number, limits: SiteLimits): PlotLimit[] {
   const keys = thicknessLimits(diameter);
   if (!keys) return [];
-  const line = (value: number, words: string) => ({ value, lines: [words, `below ${Math.round(value * 1e6)}`] });
+  const line = (value: number, words: string) => ({ value, lines: [words, `below ${limitWords(value)}`] });
   return [
     line(limits.carrierBelow.value, "carrier"),
     line(limits[keys.gripper].value, "tape or ring"),

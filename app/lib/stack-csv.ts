@@ -1,14 +1,14 @@
 import { ROOM_TEMPERATURE } from "#app/engine/laminate/layer.ts";
+import { csvOf, type CsvMark } from "./csv.ts";
 import type { ChartOthers } from "./stack-chart.ts";
 import type { Estimated } from "./stack-words.ts";
 
 const HEAD = ["stack", "temperature_K", "silicon_thickness_um", "warp_um", "linear_warp_um", "regime"];
 
 /**
- * The curves of a chart as CSV with a point as decimal mark: one row per curve and thickness, full precision, in µm. Text that a
- * spreadsheet would run as a formula is defused.
+ * The curves of a chart as CSV: one row per curve and thickness, full precision, in µm.
  */
-export function stackCsv(name: string, room: Estimated, { hot, overlay }: ChartOthers): string {
+export function stackCsv(name: string, room: Estimated, { hot, overlay }: ChartOthers, mark?: CsvMark): string {
   const curves = [
     { name, estimated: room },
     ...(hot ? [{ name, estimated: hot }] : []),
@@ -24,14 +24,7 @@ export function stackCsv(name: string, room: Estimated, { hot, overlay }: ChartO
       regime,
     ]),
   );
-  return [HEAD, ...rows].map((cells) => `${cells.map(csvCell).join(",")}\r\n`).join("");
+  return csvOf([HEAD, ...rows], mark);
 }
 
 const micrometres = (metres: number) => Number((metres * 1e6).toPrecision(12));
-
-/** One cell: numbers as they are, text quoted where it must be and never the start of a formula. */
-export function csvCell(value: string | number): string {
-  if (typeof value === "number") return String(value);
-  const safe = /^[=+\-@\t\r]/.test(value) ? `'${value}` : value;
-  return /[",\r\n]/.test(safe) ? `"${safe.replaceAll('"', '""')}"` : safe;
-}

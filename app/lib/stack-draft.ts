@@ -195,7 +195,7 @@ const sourceOf = (text: string | undefined): SourceKind => SOURCE_KINDS.find((ki
 function layerRemarks(stress: number, thickness: number | null, silicon: number | null): string[] {
   const remarks: string[] = [];
   if (stress < USUAL_STRESS.least || stress > USUAL_STRESS.most)
-    remarks.push("Stress outside −2000 to +1500 MPa, the range of the trade (common practice, no source)");
+    remarks.push("Stress outside −2000 to +1500\u00A0MPa, the range of the trade (common practice, no source)");
   if (thickness !== null && silicon !== null && thickness > THIN_FILM * silicon)
     remarks.push("Thicker than a tenth of the silicon: no thin film, so Stoney’s formula is off");
   return remarks;

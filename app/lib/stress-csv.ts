@@ -1,5 +1,5 @@
 import type { StressValueRow } from "#app/schemas/film-stress.ts";
-import { csvCell } from "./stack-csv.ts";
+import { csvOf, type CsvMark } from "./csv.ts";
 
 const HEAD = [
   "measured",
@@ -17,8 +17,8 @@ const HEAD = [
   "set_aside_reason",
 ];
 
-/** A film's history as CSV with a point as decimal mark. Blank where the reader may not know, or nobody said. */
-export function stressCsv(rows: readonly StressValueRow[]): string {
+/** A film's history as CSV. Blank where the reader may not know, or nobody said. */
+export function stressCsv(rows: readonly StressValueRow[], mark?: CsvMark): string {
   const cells = rows.map(({ origin, ...row }) => [
     row.measuredAt.slice(0, 10),
     scaled(row.value, 1e-6),
@@ -34,7 +34,7 @@ export function stressCsv(rows: readonly StressValueRow[]): string {
     row.acceptedBy,
     row.setAside?.reason ?? "",
   ]);
-  return [HEAD, ...cells].map((line) => `${line.map(csvCell).join(",")}\r\n`).join("");
+  return csvOf([HEAD, ...cells], mark);
 }
 
 const scaled = (value: number, by: number) => Number((value * by).toPrecision(12));

@@ -1,10 +1,10 @@
 import type { Expanded, FilmAnalysis } from "#app/schemas/film-analysis.ts";
-import { csvCell } from "./stack-csv.ts";
+import { csvOf, type CsvMark } from "./csv.ts";
 
 const HEAD = ["wafer", "film", "figure", "of", "value", "expanded_uncertainty_k2", "unit", "definition"];
 
 /** The figures of a film on a wafer, SI and in full precision, one a row, each with what it is. */
-export function waferFiguresCsv(wafer: string, film: string, analysis: FilmAnalysis): string {
+export function waferFiguresCsv(wafer: string, film: string, analysis: FilmAnalysis, mark?: CsvMark): string {
   const { stress, directional, directions, shape } = analysis;
   type Row = [figure: string, of: string, value: number, uncertainty: number | "", unit: string, definition: string];
   const row = (figure: string, of: string, { value, uncertainty }: Expanded, unit: string, definition = ""): Row => [
@@ -38,7 +38,5 @@ export function waferFiguresCsv(wafer: string, film: string, analysis: FilmAnaly
         )
       : []),
   ];
-  return [HEAD, ...rows.map((cells) => [wafer, film, ...cells])]
-    .map((cells) => `${cells.map(csvCell).join(",")}\r\n`)
-    .join("");
+  return csvOf([HEAD, ...rows.map((cells) => [wafer, film, ...cells])], mark);
 }

@@ -27,7 +27,7 @@ export const WALLED: readonly string[] = [
 type Query = <Row>(sql: string, params?: unknown[]) => Promise<Row[]>;
 
 /** Lets the callback ask the database as its owner, whom no wall stops. */
-async function asOwner<Result>(ask: (query: Query) => Promise<Result>): Promise<Result> {
+export async function asOwner<Result>(ask: (query: Query) => Promise<Result>): Promise<Result> {
   const url = process.env["DATABASE_OWNER_URL"];
   if (!url) throw new Error("DATABASE_OWNER_URL is not set: run the browser tests through npm test.");
   const orm = await MikroORM.init({ ...databaseOptions(url), pool: { min: 0, max: 1 } });

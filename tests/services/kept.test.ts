@@ -159,9 +159,10 @@ describe("searches of lists", () => {
 test("preferences are as delivered until they are saved, and are the person's own", async () => {
   const { mineOf, savePreferences } = await mine();
   expect((await mineOf(guest)).preferences).toEqual(DEFAULT_PREFERENCES);
-  await savePreferences(guest, { theme: "dark", density: "tight", singleKeys: false });
-  await savePreferences(guest, { theme: "light", density: "tight", singleKeys: false });
-  expect((await mineOf(guest)).preferences).toEqual({ theme: "light", density: "tight", singleKeys: false });
+  const own = { ...DEFAULT_PREFERENCES, density: "tight", length: "mil", decimalMark: "comma" } as const;
+  await savePreferences(guest, { ...own, theme: "dark" });
+  await savePreferences(guest, { ...own, theme: "light" });
+  expect((await mineOf(guest)).preferences).toEqual({ ...own, theme: "light" });
   expect((await mineOf(engineer)).preferences).toEqual(DEFAULT_PREFERENCES);
   await asOwner(database, `update preference set value = '{"theme": "sepia", "density": "tight"}'`);
   expect((await mineOf(guest)).preferences).toEqual({ ...DEFAULT_PREFERENCES, density: "tight" });

@@ -1,6 +1,7 @@
 import { FindingTag } from "#app/components/drawings/FindingTag.tsx";
 import { noBreak } from "#app/components/drawings/no-break.ts";
 import type { ComparedStep, ComparisonRow } from "#app/lib/result-comparison.ts";
+import { OwnFigure, OwnHead } from "#app/components/units/OwnFigure.tsx";
 
 interface Props {
   rows: readonly ComparisonRow[];
@@ -22,13 +23,22 @@ export function ComparisonTable({ rows, before, after, caption }: Props) {
             <th scope="col">{before}</th>
             <th scope="col">{after}</th>
             <th scope="col" className="num">
-              Warp, 25&nbsp;°C<span className="block">{before}, µm</span>
+              Warp, 25&nbsp;°C
+              <span className="block">
+                {before}, <OwnHead unit="µm" />
+              </span>
             </th>
             <th scope="col" className="num">
-              Warp, 25&nbsp;°C<span className="block">{after}, µm</span>
+              Warp, 25&nbsp;°C
+              <span className="block">
+                {after}, <OwnHead unit="µm" />
+              </span>
             </th>
             <th scope="col" className="num">
-              Difference<span className="block">µm</span>
+              Difference
+              <span className="block">
+                <OwnHead unit="µm" />
+              </span>
             </th>
           </tr>
         </thead>
@@ -60,10 +70,14 @@ function Row({ row }: { row: ComparisonRow }) {
       <td className="min-w-40">
         <Side step={after} other={before} />
       </td>
-      <td className="num">{warpOf(before)}</td>
-      <td className="num">{warpOf(after)}</td>
+      <td className="num">
+        <OwnFigure unit="µm">{warpOf(before)}</OwnFigure>
+      </td>
+      <td className="num">
+        <OwnFigure unit="µm">{warpOf(after)}</OwnFigure>
+      </td>
       <td className={`num ${difference !== null && difference !== "0" ? "font-medium text-ink" : ""}`}>
-        {difference ?? "–"}
+        <OwnFigure unit="µm">{difference ?? "–"}</OwnFigure>
       </td>
     </tr>
   );

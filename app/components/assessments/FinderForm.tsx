@@ -46,7 +46,7 @@ export function FinderForm({ found: { head, bonds, steps, asked } }: { found: Fi
         label="Target warp at most"
         defaultValue={asked.targetWarp}
         error={faults.targetWarp}
-        hint="at 25 °C, such as 150 µm"
+        hint="at 25&nbsp;°C, such as 150&nbsp;µm"
         className="w-44"
       />
       <SelectField

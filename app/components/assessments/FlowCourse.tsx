@@ -42,7 +42,7 @@ export function FlowCourse({ course, selected }: { course: readonly CourseStep[]
         }}
         label="Warp along the flow, as it lies on each tool"
         summary={[
-          "Band: ± at 25 °C, k = 2. Short dashes: what the step’s tool takes, edges up and edges down; those far beyond the wafer are left off and stand in the table.",
+          "Band: ± at 25\u00A0°C, k = 2. Short dashes: what the step’s tool takes, edges up and edges down; those far beyond the wafer are left off and stand in the table.",
           held > 0 ? "No line where tape or frame holds the wafer flat." : "",
           rolled.length > 0 ? `Ruled: rolls up at ${stepsInWords(rolled)}, so it has no bow there.` : "",
         ]

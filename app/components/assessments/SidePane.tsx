@@ -10,6 +10,7 @@ import { BondList } from "./BondList.tsx";
 import { PaneSection } from "./PaneSection.tsx";
 import { RemedyList } from "./RemedyList.tsx";
 import { SmallestChanges } from "./SmallestChanges.tsx";
+import { OwnFigure, OwnHead } from "#app/components/units/OwnFigure.tsx";
 
 /** What follows from the answer: what clears it, which inputs matter, what was assumed, which bonds; and the title block. */
 export function SidePane({ view }: { view: AssessmentView }) {
@@ -72,7 +73,7 @@ function Budget({ step }: { step: SelectedStep }) {
                 Source
               </th>
               <th scope="col" className="num py-1 font-normal">
-                µm
+                <OwnHead unit="µm" />
               </th>
             </tr>
           </thead>
@@ -85,7 +86,9 @@ function Budget({ step }: { step: SelectedStep }) {
                 <td className="py-1.5 pr-3">
                   <SourceMark kind={source} />
                 </td>
-                <td className="num py-1.5">{text}</td>
+                <td className="num py-1.5">
+                  <OwnFigure unit="µm">{text}</OwnFigure>
+                </td>
               </tr>
             ))}
           </tbody>

@@ -8,13 +8,14 @@ import { FindingNote } from "./FindingNote.tsx";
 import { StepDetails } from "./StepDetails.tsx";
 import { StepLink } from "./StepLink.tsx";
 import type { StepsProps } from "./StepTable.tsx";
+import { OwnFigure, OwnHead } from "#app/components/units/OwnFigure.tsx";
 
 /** The steps on a phone: the support bar stands upright at their left. */
 export function StepList({ steps, selected, diameter, exaggeration }: StepsProps) {
   return (
     <section aria-label="Steps as a list" className="tablet:hidden">
       <p className="border-b border-line px-3 py-2 text-label text-quiet">
-        Bow lines ×{exaggeration}. Below each: warp with k = 2 and the tool’s limit, µm.
+        Bow lines ×{exaggeration}. Below each: warp with k = 2 and the tool’s limit, <OwnHead unit="µm" />.
       </p>
       <ol>
         {steps.map((step, index) => {
@@ -63,7 +64,9 @@ export function StepList({ steps, selected, diameter, exaggeration }: StepsProps
                   />
                   {step.bow.shape.kind === "bowed" ? (
                     <span className="text-right text-label tabular-nums">
-                      {step.warpText} / {step.limitText}
+                      <OwnFigure unit="µm">
+                        {step.warpText} / {step.limitText}
+                      </OwnFigure>
                     </span>
                   ) : null}
                 </div>

@@ -8,6 +8,7 @@ import type { StepRow } from "#app/lib/assessment-steps.ts";
 import { FindingNote } from "./FindingNote.tsx";
 import { StepDetails } from "./StepDetails.tsx";
 import { StepLink } from "./StepLink.tsx";
+import { OwnFigure, OwnHead } from "#app/components/units/OwnFigure.tsx";
 
 export interface StepsProps {
   steps: readonly StepRow[];
@@ -23,7 +24,7 @@ const HEADS: readonly { head: string; unit?: string; numeric?: boolean }[] = [
   { head: "Silicon", unit: "µm", numeric: true },
   { head: "Held by" },
   { head: "Bow line" },
-  { head: "Warp, 25 °C", unit: "µm, k = 2", numeric: true },
+  { head: "Warp, 25\u00A0°C", unit: "µm, k = 2", numeric: true },
   { head: "Lies as" },
   { head: "Limit", unit: "µm", numeric: true },
   { head: "Finding" },
@@ -44,7 +45,11 @@ export function StepTable({ steps, selected, diameter, exaggeration }: StepsProp
                 className={`${numeric ? "num" : "whitespace-nowrap"} ${index === 0 ? "pl-4!" : ""}`}
               >
                 {head}
-                {unit === undefined ? null : <span className="block">{unit}</span>}
+                {unit === undefined ? null : (
+                  <span className="block">
+                    <OwnHead unit={unit} />
+                  </span>
+                )}
                 {head === "Bow line" ? <span className="block">×{exaggeration}</span> : null}
               </th>
             ))}
@@ -90,7 +95,9 @@ function Row(props: { step: StepRow; selected: boolean; diameter: number; exagge
           {noBreak(step.title)}
         </StepLink>
       </th>
-      <td className="num">{step.silicon.text}</td>
+      <td className="num">
+        <OwnFigure unit="µm">{step.silicon.text}</OwnFigure>
+      </td>
       <td className="whitespace-nowrap">{step.heldBy}</td>
       <td className="pr-0!">
         <BowLine
@@ -103,9 +110,13 @@ function Row(props: { step: StepRow; selected: boolean; diameter: number; exagge
           showScale={step.bow.shape.kind === "rolled"}
         />
       </td>
-      <td className={`num ${weight}`}>{step.warpText}</td>
+      <td className={`num ${weight}`}>
+        <OwnFigure unit="µm">{step.warpText}</OwnFigure>
+      </td>
       <td className={step.bow.shape.kind === "rolled" ? "min-w-40" : "whitespace-nowrap"}>{step.liesAs}</td>
-      <td className="num">{step.limitText}</td>
+      <td className="num">
+        <OwnFigure unit="µm">{step.limitText}</OwnFigure>
+      </td>
       <td className={step.note === null ? "" : "min-w-52 print:min-w-0"}>
         <FindingTag outcome={step.outcome}>
           <FindingNote step={step} />

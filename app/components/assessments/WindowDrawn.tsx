@@ -15,6 +15,9 @@ import type {
 import { useFlowRun } from "./use-flow-run.ts";
 import { WindowPlot } from "./WindowPlot.tsx";
 import { WindowTable } from "./WindowTable.tsx";
+import { useOwnUnits } from "#app/components/units/own-units-context.ts";
+import { ownHead, type OwnUnits } from "#app/lib/own-units.ts";
+import { ownWindow } from "#app/lib/own-window.ts";
 
 interface Props {
   page: WindowPageData;
@@ -79,12 +82,14 @@ interface DrawingProps {
 }
 
 function Drawing({ drawing, x, y, whole }: DrawingProps) {
+  const units = useOwnUnits();
+  const names = { x: nameOf(x, units), y: nameOf(y, units) };
   return (
     <>
       <WindowPlot
-        drawing={drawing}
-        names={{ x: nameOf(x), y: nameOf(y) }}
-        label={`Verdict over ${nameOf(x)} and ${nameOf(y)}; the table below says the same in words`}
+        drawing={ownWindow(drawing, { x: x.unit, y: y.unit }, units)}
+        names={names}
+        label={`Verdict over ${names.x} and ${names.y}; the table below says the same in words`}
       />
       <ul className="mt-3 flex flex-wrap gap-x-6 gap-y-1" aria-label="Key">
         {[...new Set(drawing.runs.map(({ outcome }): Outcome => outcome))].map((outcome) => (
@@ -106,4 +111,5 @@ function Drawing({ drawing, x, y, whole }: DrawingProps) {
   );
 }
 
-const nameOf = ({ label, unit }: WindowInput) => `${label.split(":")[0] ?? label}, ${unit}`;
+const nameOf = ({ label, unit }: WindowInput, units: OwnUnits) =>
+  `${label.split(":")[0] ?? label}, ${ownHead(unit, units)}`;

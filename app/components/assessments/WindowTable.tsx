@@ -16,9 +16,9 @@ export function WindowTable({ drawing: { table, tableX }, x, y }: Props) {
     <PlaneTable
       summary="Verdicts as a table"
       caption={`Verdict by ${y.label}, down, and ${x.label}, across`}
-      columns={tableX.map((value) => `${figure(value)} ${x.unit}`)}
+      columns={tableX.map((value) => `${figure(value)}\u00A0${x.unit}`)}
       rows={table.map((row) => ({
-        head: `${figure(row.y)} ${y.unit}`,
+        head: `${figure(row.y)}\u00A0${y.unit}`,
         cells: row.cells.map(({ outcome, margin }) => (
           <>
             {OUTCOME_SIGNS[outcome].word}

@@ -3,6 +3,7 @@ import { noBreak } from "#app/components/drawings/no-break.ts";
 import { Notice } from "#app/components/ui/Notice.tsx";
 import { WorkingView } from "#app/components/working/WorkingView.tsx";
 import type { CalibrationResult, FittedValue, ResidualRow } from "#app/lib/calibration-view.ts";
+import { OwnFigure, OwnHead } from "#app/components/units/OwnFigure.tsx";
 
 type Fitted = Extract<CalibrationResult, { kind: "fitted" }>;
 
@@ -92,7 +93,9 @@ function Residuals({ rows }: { rows: ResidualRow[] }) {
   return (
     <div className="overflow-x-auto border-t border-ink" tabIndex={0} role="region" aria-label={name}>
       <table className="table">
-        <caption className="sr-only">{name}, µm</caption>
+        <caption className="sr-only">
+          {name}, <OwnHead unit="µm" />
+        </caption>
         <thead>
           <tr>
             <th scope="col" className="max-tablet:hidden">
@@ -100,7 +103,10 @@ function Residuals({ rows }: { rows: ResidualRow[] }) {
             </th>
             {HEADS.map((head) => (
               <th key={head} scope="col" className={figureClass(head)}>
-                {head} <span className="block font-normal text-quiet">µm</span>
+                {head}{" "}
+                <span className="block font-normal text-quiet">
+                  <OwnHead unit="µm" />
+                </span>
               </th>
             ))}
           </tr>
@@ -118,7 +124,7 @@ function Residuals({ rows }: { rows: ResidualRow[] }) {
               </th>
               {[measured, stated, fitted, residual, uncertainty].map((figure, column) => (
                 <td key={column} className={figureClass(HEADS[column])}>
-                  {figure}
+                  <OwnFigure unit="µm">{figure}</OwnFigure>
                 </td>
               ))}
             </tr>

@@ -5,6 +5,9 @@ import { formatQuantity } from "#app/engine/units/format.ts";
 import { curveRangeWords, type ExpansionRecord } from "#app/lib/expansion-rows.ts";
 import { formatMeasured } from "#app/lib/format-measured.ts";
 import type { LibraryRecords } from "#app/schemas/library-records.ts";
+import { OwnFigure, OwnHead } from "#app/components/units/OwnFigure.tsx";
+import { ownPlot } from "#app/components/drawings/own-plot.ts";
+import { useOwnUnits } from "#app/components/units/own-units-context.ts";
 
 interface Props {
   curve: ExpansionRecord;
@@ -14,6 +17,7 @@ interface Props {
 
 /** How a carrier expands over temperature: its curve, where that comes from, and its points as a table. */
 export function ExpansionCurveSection({ curve, expansion }: Props) {
+  const units = useOwnUnits();
   const { temperatures, coefficients, tolerance, source, note, on } = curve;
   const points = temperatures.map((x, at) => ({ x, y: coefficients[at] ?? 0 }));
   return (
@@ -35,7 +39,7 @@ export function ExpansionCurveSection({ curve, expansion }: Props) {
       )}
       <div className="mt-3 grid gap-4 tablet:grid-cols-[minmax(0,1fr)_auto]">
         <PrintPlot
-          plot={expansionPlot(points)}
+          plot={ownPlot(expansionPlot(points), units)}
           label="Expansion over temperature"
           width={420}
           height={260}
@@ -48,7 +52,7 @@ export function ExpansionCurveSection({ curve, expansion }: Props) {
             <thead>
               <tr>
                 <th scope="col" className="num">
-                  °C
+                  <OwnHead unit="°C" />
                 </th>
                 <th scope="col" className="num">
                   ppm/K
@@ -59,7 +63,7 @@ export function ExpansionCurveSection({ curve, expansion }: Props) {
               {points.map(({ x, y }) => (
                 <tr key={x}>
                   <th scope="row" className="num font-normal">
-                    {figure(x, "temperature", "°C")}
+                    <OwnFigure unit="°C">{figure(x, "temperature", "°C")}</OwnFigure>
                   </th>
                   <td className="num">{figure(y, "expansion", "ppm/K")}</td>
                 </tr>

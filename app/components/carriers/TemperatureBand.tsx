@@ -6,6 +6,10 @@ import { OUTCOME_SIGNS } from "#app/components/drawings/severity.ts";
 import { formatQuantity } from "#app/engine/units/format.ts";
 import type { Outcome } from "#app/engine/vocabulary.ts";
 import { adhesiveBands, type AdhesiveTemperatures, type Band } from "#app/lib/adhesive-bands.ts";
+import { useOwnText } from "#app/components/units/OwnFigure.tsx";
+import { useOwnUnits } from "#app/components/units/own-units-context.ts";
+import { ownScale, type OwnScale } from "#app/lib/own-units.ts";
+import { multiples } from "#app/components/drawings/plot-ticks.ts";
 
 interface Props {
   temperatures: AdhesiveTemperatures;
@@ -26,10 +30,12 @@ const spoken = (bands: Band[]) =>
 
 /** The temperatures of a bonding material on one scale: where a step on it is clear, and where it bonds and lets go. */
 export function TemperatureBand({ temperatures, bond, release }: Props) {
+  const own = useOwnText();
   const { softening, flows, limit } = temperatures;
   const hottest = Math.max(limit, bond, release, softening ?? 0) - ZERO;
   const end = Math.ceil((hottest + 20) / 50) * 50;
   const x = (kelvin: number) => LEFT + ((kelvin - ZERO) / end) * (WIDTH - LEFT - RIGHT);
+  const { unit, ticks } = ticksOf(end, ownScale("°C", useOwnUnits()));
   const range = { from: ZERO, to: ZERO + end };
   const inAir = adhesiveBands(temperatures, { ...range, vacuum: false });
   const inVacuum = adhesiveBands(temperatures, { ...range, vacuum: true });
@@ -58,7 +64,7 @@ export function TemperatureBand({ temperatures, bond, release }: Props) {
         width={WIDTH}
         viewBox={`0 0 ${WIDTH} ${axis + 24}`}
         role="img"
-        aria-label={words}
+        aria-label={own(words)}
       >
         {rows.map(({ name, bands }, index) => (
           <g key={name}>
@@ -79,11 +85,11 @@ export function TemperatureBand({ temperatures, bond, release }: Props) {
           <Mark key={name} name={name} x={x(at)} y={(rows.length + index) * ROW} words={celsius(at)} foot={axis} />
         ))}
         <path d={`M${LEFT} ${axis + 0.5}H${WIDTH - RIGHT}`} stroke={colour("ink")} />
-        {Array.from({ length: end / 50 + 1 }, (_, index) => index * 50).map((degrees) => (
-          <g key={degrees}>
-            <path d={`M${coordinate(x(ZERO + degrees))} ${axis}v5`} stroke={colour("ink")} />
-            <text x={x(ZERO + degrees)} y={axis + 19} textAnchor="middle" style={{ fill: colour("quiet") }}>
-              {degrees === end ? `${degrees}\u00A0°C` : degrees}
+        {ticks.map(({ kelvin, text }, index) => (
+          <g key={text}>
+            <path d={`M${coordinate(x(kelvin))} ${axis}v5`} stroke={colour("ink")} />
+            <text x={coordinate(x(kelvin))} y={axis + 19} textAnchor="middle" style={{ fill: colour("quiet") }}>
+              {index === ticks.length - 1 ? `${text}\u00A0${unit}` : text}
             </text>
           </g>
         ))}
@@ -95,6 +101,14 @@ export function TemperatureBand({ temperatures, bond, release }: Props) {
       </figcaption>
     </figure>
   );
+}
+
+/** Every 50 °C from 0 °C on, or every 100 °F. */
+function ticksOf(end: number, scale: OwnScale | null) {
+  const at = (degrees: number, kelvin: number) => ({ text: String(degrees), kelvin });
+  if (!scale) return { unit: "°C", ticks: multiples(50, 0, end).map((degrees) => at(degrees, ZERO + degrees)) };
+  const degrees = multiples(100, scale.of(ZERO), scale.of(ZERO + end));
+  return { unit: scale.symbol, ticks: degrees.map((each) => at(each, scale.si(each))) };
 }
 
 function RowName({ y, children }: { y: number; children: string }) {

@@ -71,7 +71,7 @@ export function pairCut(carrier: LibraryRecords["carrier"], pair: TriedPair): Cu
       deviceSideUp: false,
       holding: "carrier",
       exaggeration,
-      head: "As it lies at 25 °C",
+      head: "As it lies at 25\u00A0°C",
       note:
         shape.kind === "rolled"
           ? "rolls up, ×1"

@@ -54,7 +54,7 @@ export const SILICON_LIST: ListView<Silicon> = {
     {
       key: "modulus",
       head: "Biaxial modulus",
-      unit: "GPa, 25 °C",
+      unit: "GPa, 25\u00A0°C",
       numeric: true,
       wide: true,
       cell: ({ orientation }) => formatBare(siliconBiaxialModulus(orientation), "stress", "GPa"),
@@ -121,7 +121,7 @@ function crystalRows(orientation: Silicon["orientation"]): Property[] {
 export function siliconView(silicon: Silicon): RecordView {
   const { orientation, diameter } = silicon;
   return {
-    answer: `${FACES[orientation]} silicon bends with a biaxial modulus of ${gigapascal(siliconBiaxialModulus(orientation))} at 25 °C.`,
+    answer: `${FACES[orientation]} silicon bends with a biaxial modulus of ${gigapascal(siliconBiaxialModulus(orientation))} at 25\u00A0°C.`,
     because:
       "It follows from the crystal and is the same in every direction of the face. Only the thickness below is this wafer’s own.",
     properties: [...propertyRows(silicon, SILICON_PROPERTIES), ...crystalRows(orientation)],

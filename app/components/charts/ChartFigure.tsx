@@ -1,8 +1,10 @@
 import { lazy, Suspense } from "react";
+import { ownPlot } from "../drawings/own-plot.ts";
 import type { Plot } from "../drawings/plot.ts";
 import { PlotLegend } from "../drawings/PlotLegend.tsx";
 import { PrintPlot } from "../drawings/PrintPlot.tsx";
 import type { InteractivePlotProps } from "./InteractivePlot.tsx";
+import { useOwnUnits } from "../units/own-units-context.ts";
 import { useInBrowser } from "../ui/use-in-browser.ts";
 import { PlotTable } from "./PlotTable.tsx";
 
@@ -27,7 +29,8 @@ const InteractivePlot = lazy(() =>
  * A chart in its reserved place. The server sends the plain drawing; in the browser the interactive chart takes its
  * place in the same frame, so nothing moves. Paper always gets the drawing.
  */
-export function ChartFigure({ plot, label, summary, xName }: ChartFigureProps) {
+export function ChartFigure({ plot: delivered, label, summary, xName }: ChartFigureProps) {
+  const plot = ownPlot(delivered, useOwnUnits());
   const inBrowser = useInBrowser();
   const drawing = <StaticPlot plot={plot} label={label} />;
   return (

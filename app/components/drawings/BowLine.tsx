@@ -1,4 +1,5 @@
 import { BowFigure, type BowFigureProps } from "./BowFigure.tsx";
+import { useOwnText } from "#app/components/units/OwnFigure.tsx";
 
 export interface BowLineProps extends Omit<BowFigureProps, "x" | "y"> {
   /** Shape in words, such as 'edges up 343 µm, on carrier'. Empty where the same words stand beside the drawing. */
@@ -12,6 +13,7 @@ export interface BowLineProps extends Omit<BowFigureProps, "x" | "y"> {
  * Sizes in use: table 76 × 32, strip 75 × 70, list 84 × 36, phone 72 × 26, paper 60 × 28, floor 350 wide.
  */
 export function BowLine({ label, ...figure }: BowLineProps) {
+  const own = useOwnText();
   return (
     <svg
       className="block h-auto max-w-full overflow-visible"
@@ -19,7 +21,7 @@ export function BowLine({ label, ...figure }: BowLineProps) {
       width={figure.width}
       height={figure.height}
       role={label === "" ? undefined : "img"}
-      aria-label={label === "" ? undefined : label}
+      aria-label={label === "" ? undefined : own(label)}
       aria-hidden={label === "" ? true : undefined}
     >
       <BowFigure {...figure} />

@@ -8,6 +8,7 @@ import { CUT, cutLayout, labelBaselines, NAME_SIZE, type CutPlace } from "./cut-
 import { CutPart } from "./CutPart.tsx";
 import { selectInPlace } from "./select-in-place.ts";
 import { useCutDrag } from "./use-cut-drag.ts";
+import { useOwnText } from "#app/components/units/OwnFigure.tsx";
 
 /** The words at one end of the cut, with the link that adds a film there. */
 export interface CutEnd {
@@ -65,6 +66,7 @@ export function Cut(props: CutProps) {
     const place = layout.places[index];
     return place ? [{ layer, place, index }] : [];
   });
+  const own = useOwnText();
   const { drag, handle } = useCutDrag(layout.places, onMove);
   const endY = layout.bottom + (bottom.add ? 48 : 28);
   const keyY = Math.max(endY, layout.foot) + 28;
@@ -76,7 +78,7 @@ export function Cut(props: CutProps) {
       width={CUT.width}
       viewBox={`0 0 ${CUT.width} ${height}`}
       role="group"
-      aria-label={label}
+      aria-label={own(label)}
     >
       <End end={top} y={layout.top - (top.add ? 34 : 14)} />
       <g aria-hidden="true" pointerEvents="none">
@@ -259,6 +261,7 @@ function Outline(props: { place: CutPlace; away: number; stroke?: string; classN
 }
 
 function Shape({ shape, y }: { shape: NonNullable<CutProps["shape"]>; y: number }) {
+  const own = useOwnText();
   return (
     <>
       <path d={`M16 ${y + 0.5}H448`} stroke={colour("line")} />
@@ -268,7 +271,7 @@ function Shape({ shape, y }: { shape: NonNullable<CutProps["shape"]>; y: number 
       <text x="16" y={y + 41} style={{ fill: colour("quiet") }}>
         {shape.note}
       </text>
-      <g role="img" aria-label={`${shape.head}: ${shape.note}`}>
+      <g role="img" aria-label={own(`${shape.head}: ${shape.note}`)}>
         <BowFigure
           diameter={shape.diameter}
           shape={shape.shape}

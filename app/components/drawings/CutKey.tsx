@@ -1,13 +1,14 @@
 import { colour } from "./colour.ts";
 import { coordinate } from "./coordinate.ts";
 import { CUT, layerHeight } from "./cut-layout.ts";
+import { OwnFigure, OwnHead } from "#app/components/units/OwnFigure.tsx";
 
 /** Four bars that show how height goes with thickness, at 0.4 of the drawn height, and what the arrows mean. */
 export function CutKey({ y }: { y: number }) {
   return (
     <g aria-hidden="true">
       <text x={CUT.left} y={y} style={{ fill: colour("quiet") }}>
-        Drawn height by thickness, µm
+        Drawn height by thickness, <OwnHead unit="µm" />
       </text>
       {[700, 100, 10, 1].map((micrometres, index) => {
         const height = layerHeight(micrometres * 1e-6, 1) * 0.4;
@@ -24,7 +25,7 @@ export function CutKey({ y }: { y: number }) {
               strokeWidth="0.75"
             />
             <text x={x + 17.5} y={y + 97} textAnchor="middle" style={{ fill: colour("quiet") }}>
-              {micrometres}
+              <OwnFigure unit="µm">{micrometres}</OwnFigure>
             </text>
           </g>
         );

@@ -1,6 +1,7 @@
 import type { KeyboardEvent, ReactNode, SVGAttributes } from "react";
 import type { CutLayer } from "./cut-layer.ts";
 import { selectInPlace } from "./select-in-place.ts";
+import { useOwnText } from "#app/components/units/OwnFigure.tsx";
 
 export interface CutPartProps {
   layer: CutLayer;
@@ -25,7 +26,8 @@ function spoken(layer: CutLayer): string {
  * One layer as a focusable part of the cut: a link where there is an address, else a button, else a picture with a name.
  */
 export function CutPart({ layer, index, href, onSelect, onShift, drag, children }: CutPartProps) {
-  const name = { "aria-label": spoken(layer), "data-layer": index };
+  const own = useOwnText();
+  const name = { "aria-label": own(spoken(layer)), "data-layer": index };
   const current = layer.selected ? ("true" as const) : undefined;
   if (href !== undefined) {
     return (

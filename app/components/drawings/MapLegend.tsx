@@ -2,6 +2,7 @@ import { formatQuantity } from "#app/engine/units/format.ts";
 import type { MapView } from "#app/schemas/film-analysis.ts";
 import { colour } from "./colour.ts";
 import { heightShade } from "./height-shade.ts";
+import { useOwnText } from "#app/components/units/OwnFigure.tsx";
 
 const BAR = { width: 22, height: 200, top: 12 } as const;
 const MOST_TEXTS = 7;
@@ -10,6 +11,7 @@ const um = (metres: number) => formatQuantity(metres, "length", { unit: "µm", s
 
 /** The heights that the shades of a map stand for, and how far apart its lines are. */
 export function MapLegend({ map }: { map: Pick<MapView, "low" | "high" | "step" | "bands" | "levels"> }) {
+  const own = useOwnText();
   const { low, high, step, bands, levels } = map;
   const y = (height: number) => BAR.top + BAR.height * (1 - (height - low) / (high - low || 1));
   const inside = (height: number) => Math.min(high, Math.max(low, height));
@@ -17,7 +19,7 @@ export function MapLegend({ map }: { map: Pick<MapView, "low" | "high" | "step" 
   return (
     <div className="text-label">
       <p className="text-quiet">Height over the fitted plane</p>
-      <svg width="120" height={BAR.height + 2 * BAR.top} role="img" aria-label={`From ${um(low)} to ${um(high)}`}>
+      <svg width="120" height={BAR.height + 2 * BAR.top} role="img" aria-label={own(`From ${um(low)} to ${um(high)}`)}>
         {bands.map(({ height }) => {
           const [top, bottom] = [y(inside(height + step / 2)), y(inside(height - step / 2))];
           return (

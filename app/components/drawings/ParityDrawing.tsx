@@ -3,10 +3,12 @@ import type { Predicted } from "#app/schemas/prediction.ts";
 import { colour } from "./colour.ts";
 import { coordinate } from "./coordinate.ts";
 import { BAR, parityAxis, type ParityMark } from "./parity-layout.ts";
-import type { PlotFrame } from "./plot.ts";
+import type { PlotAxis, PlotFrame } from "./plot.ts";
 import { PlotMarker } from "./PlotMarker.tsx";
 import { plotScale } from "./plot-scale.ts";
 import { roomyTicks } from "./roomy-ticks.ts";
+import { useOwnUnits } from "#app/components/units/own-units-context.ts";
+import { ownAxis } from "./own-plot.ts";
 
 interface Props {
   of: Predicted;
@@ -29,7 +31,7 @@ const TEXT = 12.5;
  * group that the model is off at. The same on screen and paper.
  */
 export function ParityDrawing({ of, marks, label, size = 520, chosen = null, onPoint, className }: Props) {
-  const axis = parityAxis(of, marks);
+  const axis = ownAxis(parityAxis(of, marks), useOwnUnits());
   const frame: PlotFrame = { left: 56, right: size - 12, top: 22, bottom: size - 42 };
   const x = plotScale(axis, frame.left, frame.right);
   const y = plotScale(axis, frame.bottom, frame.top);
@@ -113,13 +115,7 @@ function Bars({ mark, x, y }: { mark: ParityMark } & Scales) {
   );
 }
 
-function Labels({
-  axis,
-  frame,
-  size,
-  x,
-  y,
-}: { axis: ReturnType<typeof parityAxis>; frame: PlotFrame; size: number } & Scales) {
+function Labels({ axis, frame, size, x, y }: { axis: PlotAxis; frame: PlotFrame; size: number } & Scales) {
   return (
     <>
       {roomyTicks(axis.ticks, x, TEXT).map((tick) => (
@@ -133,10 +129,10 @@ function Labels({
         </text>
       ))}
       <text x={(frame.left + frame.right) / 2} y={size - 6} textAnchor="middle" style={{ fill: colour("quiet") }}>
-        {`Predicted, ${axis.symbol}`}
+        {`Predicted, ${axis.title}`}
       </text>
       <text x={4} y={13} style={{ fill: colour("quiet") }}>
-        {`Measured, ${axis.symbol}`}
+        {`Measured, ${axis.title}`}
       </text>
       <text x={frame.right - 26} y={frame.top + 13} textAnchor="end" style={{ fill: colour("quiet") }}>
         {"1 : 1"}

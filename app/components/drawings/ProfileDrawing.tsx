@@ -4,6 +4,7 @@ import { formatBare } from "#app/lib/format-measured.ts";
 import { colour } from "./colour.ts";
 import { coordinate } from "./coordinate.ts";
 import { textWidth } from "./text-width.ts";
+import { OwnFigure, useOwnText } from "#app/components/units/OwnFigure.tsx";
 
 interface Props {
   profile: TemperatureProfile;
@@ -19,6 +20,7 @@ const GAP = 8;
 
 /** A step's temperature over its time, drawn small: the line, the temperatures at which it turns or stays, and the minutes. */
 export function ProfileDrawing({ profile, label }: Props) {
+  const own = useOwnText();
   const last = profile.at(-1)?.time ?? 0;
   const temperatures = profile.map(({ temperature }) => temperature);
   const [low, high] = [Math.min(ROOM_TEMPERATURE, ...temperatures), Math.max(ROOM_TEMPERATURE + 1, ...temperatures)];
@@ -34,7 +36,7 @@ export function ProfileDrawing({ profile, label }: Props) {
       width={WIDTH}
       height={HEIGHT}
       role="img"
-      aria-label={label}
+      aria-label={own(label)}
     >
       <path d={`M${FRAME.left} ${coordinate(y(ROOM_TEMPERATURE))}H${FRAME.right}`} stroke={colour("line")} />
       <text
@@ -43,14 +45,14 @@ export function ProfileDrawing({ profile, label }: Props) {
         textAnchor="end"
         style={{ fill: colour("quiet") }}
       >
-        25
+        <OwnFigure unit="°C">25</OwnFigure>
       </text>
       <path d={`${path}`} fill="none" stroke={colour("silicon")} strokeWidth="1.5" strokeLinejoin="round" />
       {spaced(
         named(profile).map((at) => ({ at, middle: x(profile[at]?.time ?? 0), text: degrees(temperatures[at]) })),
       ).map(({ at, middle, text }) => (
         <text key={at} x={coordinate(middle)} y={coordinate(y(temperatures[at] ?? low) - 5)} textAnchor="middle">
-          {text}
+          <OwnFigure unit="°C">{text}</OwnFigure>
         </text>
       ))}
       {spaced(profile.map(({ time }, at) => ({ at, middle: x(time), text: formatBare(time, "time", "min") }))).map(

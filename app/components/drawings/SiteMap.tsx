@@ -1,5 +1,6 @@
 import { colour } from "./colour.ts";
 import { coordinate } from "./coordinate.ts";
+import { OwnFigure, OwnHead, useOwnText } from "#app/components/units/OwnFigure.tsx";
 
 interface Site {
   /** from the wafer's centre, m */
@@ -29,6 +30,7 @@ const WAFER = 100;
  * that a grey print reads the same.
  */
 export function SiteMap({ sites, radius, label, unit, format }: Props) {
+  const own = useOwnText();
   const values = sites.map(({ value }) => value);
   const [least, most] = [Math.min(...values), Math.max(...values)];
   const step = (most - least) / CLASSES;
@@ -41,7 +43,7 @@ export function SiteMap({ sites, radius, label, unit, format }: Props) {
     <svg
       viewBox={`0 0 ${BOX.side + BOX.legend} ${BOX.side}`}
       role="img"
-      aria-label={label}
+      aria-label={own(label)}
       className="block w-full max-w-90 text-label"
     >
       <circle cx={centre} cy={centre} r={WAFER} fill={colour("raised")} stroke={colour("silicon")} strokeWidth={1.2} />
@@ -49,13 +51,15 @@ export function SiteMap({ sites, radius, label, unit, format }: Props) {
         <Dot key={n} x={centre + at(x)} y={centre - at(y)} level={classOf(value)} />
       ))}
       <text x={BOX.side + 6} y={24} fill={colour("quiet")}>
-        {unit}
+        <OwnHead unit={unit} />
       </text>
       {shown.map((level, row) => (
         <g key={level}>
           <Dot x={BOX.side + 12} y={42 + ROW * row} level={level} />
           <text x={BOX.side + 24} y={46 + ROW * row} fill={colour("ink")}>
-            {step === 0 ? format(least) : `${format(least + level * step)} to ${format(least + (level + 1) * step)}`}
+            <OwnFigure unit={unit}>
+              {step === 0 ? format(least) : `${format(least + level * step)} to ${format(least + (level + 1) * step)}`}
+            </OwnFigure>
           </text>
         </g>
       ))}

@@ -8,6 +8,7 @@ import { StripScales } from "./StripScales.tsx";
 import type { StripStep } from "./strip-step.ts";
 import { SupportPlanned } from "./SupportPlanned.tsx";
 import { SupportRequired } from "./SupportRequired.tsx";
+import { OwnHead } from "#app/components/units/OwnFigure.tsx";
 
 export interface StepStripProps {
   steps: readonly StripStep[];
@@ -155,7 +156,7 @@ function Frame({ steps, columns, width, height }: FrameProps) {
 function Heads({ exaggeration }: { exaggeration: number }) {
   const heads: readonly [y: number, head: string, under?: string][] = [
     [78, "Silicon", "µm, to scale"],
-    [136, "Temperature", "°C at the step"],
+    [136, "Temperature", "°C, at the step"],
     [196, "Bow line", `as it lies, ×${exaggeration}`],
     [284, "Warp", "% of tool’s limit"],
     [382, "Support needed"],
@@ -173,7 +174,7 @@ function Heads({ exaggeration }: { exaggeration: number }) {
           </text>
           {under === undefined ? null : (
             <text x="16" y={y + 17} style={{ fill: colour("quiet") }}>
-              {under}
+              <OwnHead unit={under} />
             </text>
           )}
         </g>

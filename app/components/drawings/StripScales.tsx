@@ -3,6 +3,7 @@ import { coordinate } from "./coordinate.ts";
 import type { StripStep } from "./strip-step.ts";
 import { textWidth } from "./text-width.ts";
 import { wrapText } from "./wrap-text.ts";
+import { OwnFigure } from "#app/components/units/OwnFigure.tsx";
 
 export interface StripScalesProps {
   steps: readonly StripStep[];
@@ -82,7 +83,7 @@ function Silicon({ steps, columns }: PlanRowProps) {
         const y = height(step.silicon.thickness);
         return (
           <text key={step.number} x={at(index) + 8} y={coordinate(102 - y >= 18 ? y + 15 : y - 6)}>
-            {step.silicon.text}
+            <OwnFigure unit="µm">{step.silicon.text}</OwnFigure>
           </text>
         );
       })}
@@ -116,7 +117,7 @@ function Temperature({ steps, columns }: PlanRowProps) {
             <path d={`M${coordinate(from)} ${y}H${coordinate(to)}`} stroke={colour("ink")} strokeWidth="1.5" />
             {warm ? (
               <text x={coordinate((from + to) / 2)} y={coordinate(Number(y) - 5)} textAnchor="middle">
-                {step.temperature.text}
+                <OwnFigure unit="°C">{step.temperature.text}</OwnFigure>
               </text>
             ) : null}
           </g>

@@ -4,6 +4,7 @@ import { colour } from "./colour.ts";
 import { coordinate } from "./coordinate.ts";
 import { heightShade } from "./height-shade.ts";
 import { MapLegend } from "./MapLegend.tsx";
+import { useOwnText } from "#app/components/units/OwnFigure.tsx";
 
 export interface WaferMapProps {
   map: MapView;
@@ -29,6 +30,7 @@ const HEAVY = 5;
  * and the axis about which it bends least. Pure, the same on screen and paper.
  */
 export function WaferMap({ map, label, azimuths, axis }: WaferMapProps) {
+  const own = useOwnText();
   const size = 2 * (R + MARGIN);
   const id = useId();
   return (
@@ -37,7 +39,7 @@ export function WaferMap({ map, label, azimuths, axis }: WaferMapProps) {
         className="block h-auto w-full max-w-[420px] flex-1 basis-64"
         viewBox={`${-size / 2} ${-size / 2} ${size} ${size}`}
         role="img"
-        aria-label={label}
+        aria-label={own(label)}
       >
         <clipPath id={id}>
           <circle r={coordinate((R * map.radius) / map.waferRadius)} />

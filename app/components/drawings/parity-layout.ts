@@ -23,7 +23,7 @@ const UNITS: Record<Predicted, { symbol: string; size: number; least: number }> 
 const ROOM = 0.05;
 
 /** The one scale of both axes: every point with its bars lies within it, and equal lengths mean equal figures. */
-export function parityAxis(of: Predicted, marks: readonly ParityMark[]): PlotAxis & { symbol: string } {
+export function parityAxis(of: Predicted, marks: readonly ParityMark[]): PlotAxis {
   const { symbol, size, least } = UNITS[of];
   const ends = marks.flatMap(({ predicted: p, predictedUncertainty: u, measured: m, measuredUncertainty: v }) => [
     p - BAR * u,
@@ -39,7 +39,7 @@ export function parityAxis(of: Predicted, marks: readonly ParityMark[]): PlotAxi
     from,
     to,
     ticks: multiples(niceStep((to - from) / 5), from, to).map((value) => ({ value, text: signedTick(value / size) })),
-    symbol,
+    title: symbol,
     format: (value) => `${signedTick(value / size)}\u00A0${symbol}`,
   };
 }

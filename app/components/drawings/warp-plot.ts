@@ -106,5 +106,5 @@ export function thicknessTicks(from: number, to: number): PlotTick[] {
 
 /** A power of ten of metres in the unit that keeps it short. */
 export function decadeText(metres: number): string {
-  return metres >= 0.999e-3 ? `${Math.round(metres * 1000)} mm` : `${Math.round(metres / MICROMETRE)} µm`;
+  return metres >= 0.999e-3 ? `${Math.round(metres * 1000)}\u00A0mm` : `${Math.round(metres / MICROMETRE)}\u00A0µm`;
 }

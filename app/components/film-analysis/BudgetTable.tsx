@@ -1,6 +1,7 @@
 import { formatWithUncertainty, formatQuantity } from "#app/engine/units/format.ts";
 import { withoutUnit } from "#app/lib/format-measured.ts";
 import type { Budget, BudgetRow, Expanded } from "#app/schemas/film-analysis.ts";
+import { OwnFigure, OwnHead } from "#app/components/units/OwnFigure.tsx";
 
 const WORDS: Record<string, string> = {
   "scatter of the scans": "Curvature, from the scatter of the points",
@@ -37,7 +38,9 @@ export function BudgetTable({ budget, stress }: { budget: Budget; stress: Expand
               <th scope="col">Input</th>
               <th scope="col" className="num">
                 Adds, k = {k}
-                <span className="block">MPa</span>
+                <span className="block">
+                  <OwnHead unit="MPa" />
+                </span>
               </th>
               <th scope="col" className="num">
                 Part of the whole
@@ -78,7 +81,9 @@ function Row({ row, k, total }: { row: BudgetRow; k: number; total: number }) {
       {given ? (
         <>
           <td className="num">
-            {withoutUnit(formatQuantity(k * contribution, "stress", { unit: "MPa", significant: 2 }))}
+            <OwnFigure unit="MPa">
+              {withoutUnit(formatQuantity(k * contribution, "stress", { unit: "MPa", significant: 2 }))}
+            </OwnFigure>
           </td>
           <td className="num">
             {share < 0.005 ? "under\u00A01\u00A0%" : formatQuantity(share, "fraction", { unit: "%", decimals: 0 })}

@@ -44,7 +44,7 @@ export function TypedValueForm({
             label="Stress"
             dimension="stress"
             example="31 MPa"
-            hint="Tension positive, at 25 °C"
+            hint="Tension positive, at 25&nbsp;°C"
           />
           <QuantityField
             field={fields.uncertainty}

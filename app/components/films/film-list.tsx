@@ -16,7 +16,7 @@ export const FILM_LIST: ListView<LibraryRecords["film"]> = {
     { key: "kind", head: "Kind", sortable: true, wide: true, cell: ({ kind }) => kind },
     {
       key: "stress",
-      head: "Stress at 25 °C",
+      head: "Stress at 25\u00A0°C",
       unit: "MPa",
       numeric: true,
       sortable: true,

@@ -3,8 +3,8 @@ import type { PropertyDescription } from "#app/components/library/property.ts";
 /** The measured properties of a film, in the order of its table and form. */
 export const FILM_PROPERTIES = {
   stress: {
-    label: "Stress at 25 °C, tension positive",
-    ask: "Stress at 25 °C, held flat on a full-thickness monitor; tension is positive",
+    label: "Stress at 25\u00A0°C, tension positive",
+    ask: "Stress at 25\u00A0°C, held flat on a full-thickness monitor; tension is positive",
     dimension: "stress",
     unit: "MPa",
     sign: true,
@@ -14,8 +14,8 @@ export const FILM_PROPERTIES = {
   poissonsRatio: { label: "Poisson’s ratio", dimension: "number", unit: "", example: "0.34" },
   expansion: { label: "Thermal expansion", dimension: "expansion", unit: "ppm/K", example: "16.7 ppm/K" },
   yieldStress: {
-    label: "Yield stress at 25 °C",
-    ask: "Yield stress at 25 °C, for a metal that yields",
+    label: "Yield stress at 25\u00A0°C",
+    ask: "Yield stress at 25\u00A0°C, for a metal that yields",
     dimension: "stress",
     unit: "MPa",
     example: "200 MPa",

@@ -6,11 +6,11 @@ type Film = LibraryRecords["film"];
 
 /** What a film does to a wafer by itself, on the device side, device side up. */
 export function filmAnswer({ stress }: Film): string {
-  if (stress.value === 0) return "Without stress at 25 °C: by itself it does not bend the wafer.";
+  if (stress.value === 0) return "Without stress at 25\u00A0°C: by itself it does not bend the wafer.";
   const pull = formatMeasured(stress, "stress", { unit: "MPa", sign: true });
   return stress.value > 0
-    ? `In tension at 25 °C, ${pull}: on the device side it pulls the wafer to a bowl, edges up.`
-    : `In compression at 25 °C, ${pull}: on the device side it pushes the wafer to a dome, edges down.`;
+    ? `In tension at 25\u00A0°C, ${pull}: on the device side it pulls the wafer to a bowl, edges up.`
+    : `In compression at 25\u00A0°C, ${pull}: on the device side it pushes the wafer to a dome, edges down.`;
 }
 
 /** What becomes of that with heat. */

@@ -3,6 +3,7 @@ import { plannedRowsHeight } from "#app/components/drawings/planned-spans.ts";
 import { StripPlan } from "#app/components/drawings/StripScales.tsx";
 import type { StripStep } from "#app/components/drawings/strip-step.ts";
 import { SupportPlanned } from "#app/components/drawings/SupportPlanned.tsx";
+import { OwnHead } from "#app/components/units/OwnFigure.tsx";
 
 /** One step as far as it can be drawn before anything is computed. */
 export type PlannedStep = Pick<StripStep, "number" | "name" | "shortName" | "silicon" | "temperature" | "planned">;
@@ -13,7 +14,7 @@ const RIGHT = 24;
 const NARROWEST_COLUMN = 48;
 const HEADS: readonly [y: number, head: string, under?: string][] = [
   [78, "Silicon", "µm, to scale"],
-  [136, "Temperature", "°C at the step"],
+  [136, "Temperature", "°C, at the step"],
   [200, "Support planned"],
 ];
 
@@ -44,7 +45,7 @@ export function FlowPlan({ steps }: { steps: readonly PlannedStep[] }) {
             </text>
             {under && (
               <text x="24" y={y + 17} style={{ fill: colour("quiet") }}>
-                {under}
+                <OwnHead unit={under} />
               </text>
             )}
           </g>

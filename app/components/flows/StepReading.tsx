@@ -62,7 +62,7 @@ function measuredOf(step: StepDetail): Property[] {
     .filter(({ change }) => change === "adds")
     .flatMap(({ film, thickness, stress }): Property[] => [
       length(`${film.name}: thickness`, thickness),
-      { label: `${film.name}: stress at 25 °C`, measured: stress, dimension: "stress", unit: "MPa", sign: true },
+      { label: `${film.name}: stress at 25\u00A0°C`, measured: stress, dimension: "stress", unit: "MPa", sign: true },
     ]);
   const all: Property[] = [
     length("Silicon after the step", step.siliconAfter),

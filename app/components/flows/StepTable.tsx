@@ -3,6 +3,7 @@ import { Link } from "react-router";
 import { noBreak } from "#app/components/drawings/no-break.ts";
 import type { StepRow } from "#app/lib/flow-rows.ts";
 import { StepIcon } from "./StepIcon.tsx";
+import { OwnFigure, OwnHead } from "#app/components/units/OwnFigure.tsx";
 
 export interface StepTableProps {
   caption: string;
@@ -38,10 +39,16 @@ export function StepTable({ caption, rows, href, current, actions, more, drag, b
               Adds or removes
             </th>
             <th scope="col" className="num max-tablet:hidden">
-              Peak<span className="block">°C</span>
+              Peak
+              <span className="block">
+                <OwnHead unit="°C" />
+              </span>
             </th>
             <th scope="col" className="num max-tablet:hidden">
-              Silicon after<span className="block">µm</span>
+              Silicon after
+              <span className="block">
+                <OwnHead unit="µm" />
+              </span>
             </th>
             <th scope="col" className="max-wide:hidden">
               Tool
@@ -159,7 +166,9 @@ function Row({ row, href, current, actions, more, handle, look }: RowProps) {
         <div className="tablet:hidden">
           <p className="text-label text-quiet">
             {slots && `${slots}: `}
-            {silicon.text} µm, {peak} °C{minutes && `, ${minutes}`}, {planned}
+            {silicon.text}&nbsp;µm, <OwnFigure unit="°C">{peak}</OwnFigure>&nbsp;
+            <OwnHead unit="°C" />
+            {minutes && `, ${minutes}`}, {planned}
             {bond && `: ${noBreak(bond)}`}
             {tool === null && <>, {toolWords}</>}
             {run && `, ${run}`}
@@ -184,12 +193,12 @@ function Row({ row, href, current, actions, more, handle, look }: RowProps) {
         <Changes changes={changes} />
       </td>
       <td className="num align-top max-tablet:hidden">
-        {peak}
+        <OwnFigure unit="°C">{peak}</OwnFigure>
         {minutes && <span className="block text-label text-quiet">{minutes}</span>}
         {row.profiled && <span className="block text-label text-quiet">profile</span>}
       </td>
       <td className={`num align-top max-tablet:hidden ${silicon.changed ? "font-semibold" : "text-quiet"}`}>
-        {silicon.text}
+        <OwnFigure unit="µm">{silicon.text}</OwnFigure>
       </td>
       <td className="align-top max-wide:hidden">
         {toolWords}

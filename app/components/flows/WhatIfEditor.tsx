@@ -8,6 +8,7 @@ import { quantityText } from "#app/lib/form-values.ts";
 import { readQuantity } from "#app/lib/read-quantity.ts";
 import { RULES } from "#app/schemas/ranges.ts";
 import type { ChosenField, TypedField, WhatIfChange, WhatIfSnapshot } from "#app/schemas/what-if.ts";
+import { Understood } from "#app/components/units/Understood.tsx";
 
 const TYPED = {
   siliconAfter: { rule: RULES.siliconThickness, unit: "µm" },
@@ -134,7 +135,13 @@ export function WhatIfEditor({ snapshot, onChange, onTurn }: Props) {
           autoComplete="off"
           spellCheck={false}
           onChange={(event) => type(event.currentTarget.value)}
-          hint={reading?.ok ? `${reading.understood}; now ${now}` : `Now ${now}`}
+          hint={
+            <>
+              {reading?.ok && <Understood text={reading.understood} dimension={TYPED[field].rule.dimension} />}
+              {reading?.ok ? "; now " : "Now "}
+              {now && <Understood text={now} dimension={TYPED[field].rule.dimension} />}
+            </>
+          }
           error={reading && !reading.ok ? reading.message : undefined}
         />
       ) : (

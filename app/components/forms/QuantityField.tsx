@@ -3,6 +3,7 @@ import { useState, type ReactNode } from "react";
 import type { Dimension } from "#app/engine/units/dimensions.ts";
 import { parseQuantity } from "#app/engine/units/parse-quantity.ts";
 import { readQuantity, type QuantityRule } from "#app/lib/read-quantity.ts";
+import { Understood, Verbatim } from "#app/components/units/Understood.tsx";
 
 interface Props {
   field: FieldMetadata<string | undefined>;
@@ -49,7 +50,13 @@ export function QuantityField({ field, label, dimension, rule, example, hint, cl
         }}
       />
       <small id={field.errorId} aria-live="polite">
-        {fault ?? (reading?.ok ? reading.understood : hint)}
+        {fault !== undefined ? (
+          <Verbatim>{fault}</Verbatim>
+        ) : reading?.ok ? (
+          <Understood text={reading.understood} dimension={dimension} />
+        ) : (
+          hint
+        )}
       </small>
     </div>
   );

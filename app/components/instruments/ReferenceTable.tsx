@@ -3,6 +3,7 @@ import { withoutUnit } from "#app/lib/format-measured.ts";
 import { signedMicrometres } from "#app/lib/reference-summary.ts";
 import type { ReferenceView } from "#app/schemas/instrument.ts";
 import { SetAside } from "./SetAside.tsx";
+import { OwnFigure, OwnHead } from "#app/components/units/OwnFigure.tsx";
 
 /** The readings of a wafer of known bow, oldest first, each against it. */
 export function ReferenceTable({ reference, mayCheck }: { reference: ReferenceView; mayCheck: boolean }) {
@@ -16,10 +17,16 @@ export function ReferenceTable({ reference, mayCheck }: { reference: ReferenceVi
           <tr>
             <th scope="col">Reading</th>
             <th scope="col" className="num">
-              Bow<span className="block font-normal text-quiet">µm</span>
+              Bow
+              <span className="block font-normal text-quiet">
+                <OwnHead unit="µm" />
+              </span>
             </th>
             <th scope="col" className="num">
-              Less known<span className="block font-normal text-quiet">µm</span>
+              Less known
+              <span className="block font-normal text-quiet">
+                <OwnHead unit="µm" />
+              </span>
             </th>
             <th scope="col">Agrees</th>
           </tr>
@@ -36,8 +43,12 @@ export function ReferenceTable({ reference, mayCheck }: { reference: ReferenceVi
                     <SetAside what="reading" id={id} name={`reading ${n + 1} of ${wafer.name}`} />
                   )}
                 </th>
-                <td className="num">{um(bow)}</td>
-                <td className="num">{withoutUnit(signedMicrometres(error))}</td>
+                <td className="num">
+                  <OwnFigure unit="µm">{um(bow)}</OwnFigure>
+                </td>
+                <td className="num">
+                  <OwnFigure unit="µm">{withoutUnit(signedMicrometres(error))}</OwnFigure>
+                </td>
                 <td>{setAside === null ? agreesWords(passes) : `set aside: ${setAside}`}</td>
               </tr>
             );

@@ -4,6 +4,7 @@ import { withoutUnit } from "#app/lib/format-measured.ts";
 import { COVERAGE } from "#app/lib/scan-answer.ts";
 import { WAFER_FIGURES, type WaferFigure, type WaferFigureName } from "#app/lib/wafer-figures.ts";
 import type { LotWafer } from "#app/schemas/lot-view.ts";
+import { OwnFigure, OwnHead } from "#app/components/units/OwnFigure.tsx";
 
 const HEADS: Record<WaferFigureName, { head: string; unit: string; decimals: number; sign?: boolean }> = {
   bow: { head: "Bow", unit: "µm", decimals: 1, sign: true },
@@ -36,7 +37,9 @@ export function LotWafers({ wafers }: { wafers: readonly LotWafer[] }) {
               {WAFER_FIGURES.map((name) => (
                 <th key={name} scope="col" className="num min-w-24">
                   {HEADS[name].head}
-                  <span className="block">{HEADS[name].unit}</span>
+                  <span className="block">
+                    <OwnHead unit={HEADS[name].unit} />
+                  </span>
                 </th>
               ))}
               <th scope="col" className="num">
@@ -103,7 +106,9 @@ function Figure({ figure, name, told }: { figure: WaferFigure | undefined; name:
       : formatWithUncertainty(figure.value, COVERAGE * figure.uncertainty, dimension, { unit, sign });
   return (
     <>
-      <span className="whitespace-nowrap">{withoutUnit(text)}</span>
+      <span className="whitespace-nowrap">
+        <OwnFigure unit={unit}>{withoutUnit(text)}</OwnFigure>
+      </span>
       {!told && <span className="block text-label text-quiet">{way(figure)}</span>}
     </>
   );

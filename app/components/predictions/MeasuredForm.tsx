@@ -63,7 +63,7 @@ export function MeasuredForm({ page: { steps, summaries, assessment }, lastResul
             label: `Step ${step}, ${title}${predicted ? `: ${bowText(predicted.bow)}` : ""}`,
           }))}
           blank="Choose the step"
-          hint="With the bow that is predicted there, at 25 °C"
+          hint="With the bow that is predicted there, at 25&nbsp;°C"
         />
         {summaries.length > 0 && (
           <ChoiceField
@@ -99,7 +99,7 @@ export function MeasuredForm({ page: { steps, summaries, assessment }, lastResul
             label="± of a bow, k = 2"
             dimension="length"
             example="2 µm"
-            hint="Blank: 2 µm half-width is taken"
+            hint="Blank: 2&nbsp;µm half-width is taken"
           />
           <ChoiceField
             field={fields.sideUp}

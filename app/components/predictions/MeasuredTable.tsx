@@ -2,6 +2,7 @@ import { useId } from "react";
 import { Form } from "react-router";
 import { bowWithUncertainty } from "#app/lib/prediction-words.ts";
 import type { StepMeasurementRow, StepMeasurements } from "#app/schemas/step-measurement.ts";
+import { OwnFigure, OwnHead } from "#app/components/units/OwnFigure.tsx";
 
 /** Every bow that is recorded beside an assessment, by step. */
 export function MeasuredTable({ page: { rows, maySetAside } }: { page: StepMeasurements }) {
@@ -15,11 +16,15 @@ export function MeasuredTable({ page: { rows, maySetAside } }: { page: StepMeasu
             <th scope="col">Lot, wafer</th>
             <th scope="col" className="num">
               Predicted
-              <span className="block">µm, k = 2</span>
+              <span className="block">
+                <OwnHead unit="µm, k = 2" />
+              </span>
             </th>
             <th scope="col" className="num">
               Measured
-              <span className="block">µm, k = 2</span>
+              <span className="block">
+                <OwnHead unit="µm, k = 2" />
+              </span>
             </th>
             <th scope="col">Measured on</th>
             <th scope="col">Recorded</th>
@@ -43,9 +48,11 @@ function Row({ row, maySetAside }: { row: StepMeasurementRow; maySetAside: boole
         {row.step}, {row.title}
       </td>
       <td>{[row.lot, row.wafer].filter(Boolean).join(", ")}</td>
-      <td className="num">{bowWithUncertainty(row.predicted, row.predictedUncertainty)}</td>
       <td className="num">
-        {bowWithUncertainty(row.bow, row.standardUncertainty)}
+        <OwnFigure unit="µm">{bowWithUncertainty(row.predicted, row.predictedUncertainty)}</OwnFigure>
+      </td>
+      <td className="num">
+        <OwnFigure unit="µm">{bowWithUncertainty(row.bow, row.standardUncertainty)}</OwnFigure>
         {!row.stated && <span className="block text-label text-quiet">± not stated</span>}
       </td>
       <td>

@@ -3,6 +3,7 @@ import { ParityDrawing } from "#app/components/drawings/ParityDrawing.tsx";
 import { useInBrowser } from "#app/components/ui/use-in-browser.ts";
 import { withExpanded } from "#app/lib/prediction-words.ts";
 import type { Predicted, PredictionPoint } from "#app/schemas/prediction.ts";
+import { useOwnText } from "#app/components/units/OwnFigure.tsx";
 
 interface Props {
   of: Predicted;
@@ -14,6 +15,7 @@ interface Props {
 /** The parity plot with its read-out: by pointer, or from point to point with the arrow keys. */
 export function ParityFigure({ of, points, off }: Props) {
   const [chosen, choose] = useState<string | null>(null);
+  const own = useOwnText();
   const inBrowser = useInBrowser();
   const ordered = points.toSorted((a, b) => a.predicted - b.predicted || a.measured - b.measured);
   const marks = ordered.map((point) => ({ ...point, off: off.has(point.group) }));
@@ -35,7 +37,7 @@ export function ParityFigure({ of, points, off }: Props) {
             step={1}
             value={Math.max(0, at)}
             aria-label="Read point by point"
-            aria-valuetext={read ? readText(of, read) : "no point is read yet"}
+            aria-valuetext={read ? own(readText(of, read)) : "no point is read yet"}
             onChange={(event) =>
               choose(ordered[Math.min(event.currentTarget.valueAsNumber, ordered.length - 1)]?.id ?? null)
             }

@@ -1,5 +1,6 @@
 import { bareWithExpanded, sizeOf, slopeText } from "#app/lib/prediction-words.ts";
 import type { Predicted, PredictionGroup } from "#app/schemas/prediction.ts";
+import { OwnFigure, OwnHead } from "#app/components/units/OwnFigure.tsx";
 
 interface Props {
   of: Predicted;
@@ -22,7 +23,9 @@ export function ParityGroups({ of, groups }: Props) {
             </th>
             <th scope="col" className="num">
               Bias
-              <span className="block">{unit}, k = 2</span>
+              <span className="block">
+                <OwnHead unit={`${unit}, k = 2`} />
+              </span>
             </th>
             <th scope="col" className="num max-tablet:hidden">
               Spread
@@ -41,7 +44,9 @@ export function ParityGroups({ of, groups }: Props) {
                 {group.step}
               </th>
               <td className="num">{group.count}</td>
-              <td className="num">{bareWithExpanded(of, group.bias, group.biasUncertainty)}</td>
+              <td className="num">
+                <OwnFigure unit={unit}>{bareWithExpanded(of, group.bias, group.biasUncertainty)}</OwnFigure>
+              </td>
               <td className="num max-tablet:hidden">{group.count > 1 ? sizeOf(of, group.spread) : "one point"}</td>
               <td className="num max-tablet:hidden">{slopeText(group)}</td>
               <td className={group.isOff ? "font-semibold text-caution" : undefined}>{group.sentence}</td>

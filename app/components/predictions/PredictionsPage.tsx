@@ -114,7 +114,7 @@ function Compared({ predictions, all }: { predictions: Predictions; all: NonNull
 }
 
 const RESTS_ON = {
-  bow: "Predicted: what the assessment says of the step at 25 °C, with the tolerances of its inputs. Measured: bows recorded after a step, and bows that lots came in with; where nobody stated an uncertainty a half-width of 2 µm is taken. What is held against one assessment shares its error, so more wafers do not make the bias better known than that.",
+  bow: "Predicted: what the assessment says of the step at 25\u00A0°C, with the tolerances of its inputs. Measured: bows recorded after a step, and bows that lots came in with; where nobody stated an uncertainty a half-width of 2\u00A0µm is taken. What is held against one assessment shares its error, so more wafers do not make the bias better known than that.",
   stress:
     "Predicted: the stress that the film had in use when the wafer was measured, with its tolerance. Measured: the stress of the scan. What a film’s history has set aside is left out.",
 } as const;

@@ -14,13 +14,28 @@ const DENSITY_WORDS: Record<Preferences["density"], string> = {
   tight: "Tight: more rows on a screen",
 };
 
+const LENGTH_WORDS: Record<Preferences["length"], string> = {
+  µm: "µm",
+  mil: "mil, a thousandth of an inch",
+};
+const STRESS_WORDS: Record<Preferences["stress"], string> = {
+  MPa: "MPa, moduli in GPa",
+  ksi: "ksi, moduli in Msi",
+};
+const TEMPERATURE_WORDS: Record<Preferences["temperature"], string> = { "°C": "°C", "°F": "°F" };
+const DECIMAL_MARK_WORDS: Record<Preferences["decimalMark"], string> = {
+  point: "1.5, with commas between columns",
+  comma: "1,5, with semicolons between columns",
+};
+
 interface Props {
   preferences: Preferences;
   saved: boolean;
 }
 
 /** How the program looks and answers keys, for the person alone and on every device that they sign in on. */
-export function PreferencesPage({ preferences: { theme, density, singleKeys }, saved }: Props) {
+export function PreferencesPage({ preferences, saved }: Props) {
+  const { theme, density, singleKeys, length, stress, temperature, decimalMark } = preferences;
   return (
     <>
       <PageHead title="Preferences" remark="For you alone, wherever you sign in" />
@@ -42,6 +57,20 @@ export function PreferencesPage({ preferences: { theme, density, singleKeys }, s
             Switch it off if you speak to your device, or press keys by accident. Keys with control or command stay.
           </p>
         </fieldset>
+        <Choices title="Lengths below 1 mm" name="length" words={LENGTH_WORDS} chosen={length}>
+          From 1 mm on they stay in mm, and what is in nm stays in nm.
+        </Choices>
+        <Choices title="Stresses" name="stress" words={STRESS_WORDS} chosen={stress} />
+        <Choices title="Temperatures" name="temperature" words={TEMPERATURE_WORDS} chosen={temperature}>
+          Differences, and what is per degree, stay in K.
+        </Choices>
+        <p className="border-b border-line p-4 text-quiet tablet:px-6">
+          You read figures in these units. What is stored, sent to other programs, put into files and printed on sheets
+          stays in µm, MPa and °C. A field takes any unit, whichever you read, and keeps what was typed.
+        </p>
+        <Choices title="Figures in CSV files" name="decimalMark" words={DECIMAL_MARK_WORDS} chosen={decimalMark}>
+          For your spreadsheet. Films are read back from either.
+        </Choices>
         <div className="p-4 tablet:px-6">
           <SubmitButton busy="Saving">Save preferences</SubmitButton>
         </div>

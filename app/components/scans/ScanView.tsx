@@ -13,6 +13,7 @@ import { ScanRemarks } from "./ScanRemarks.tsx";
 import { ScanWorking } from "./ScanWorking.tsx";
 import { scanCurves } from "./scan-curves.ts";
 import { ScanInputs } from "./ScanInputs.tsx";
+import { OwnHead } from "#app/components/units/OwnFigure.tsx";
 
 /** A scan on its sheet: the answer, the curves, where the uncertainty comes from, how the files were read. */
 export function ScanView({ scan }: { scan: ScanDetail }) {
@@ -38,7 +39,7 @@ export function ScanView({ scan }: { scan: ScanDetail }) {
         <div className="min-w-0">
           <section className="p-4 tablet:p-6" aria-labelledby="profile">
             <h2 id="profile" className="mb-2 font-semibold">
-              Profile, µm
+              Profile, <OwnHead unit="µm" />
             </h2>
             <ProfileChart
               data={scanCurves(scan)}

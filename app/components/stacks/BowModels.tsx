@@ -26,11 +26,11 @@ export const BowModels = memo(function BowModels({ estimated: { answer } }: { es
   return (
     <section className="border-t border-line px-4 py-3 tablet:px-6" aria-labelledby="models">
       <h3 id="models" className="font-semibold">
-        Bow by three models, 25 °C
+        Bow by three models, 25&nbsp;°C
       </h3>
       <div className="mt-1 overflow-x-auto" tabIndex={0} role="region" aria-label="Bow by three models">
         <table className="table">
-          <caption className="sr-only">Bow by three models at 25 °C, device side up, centre high positive</caption>
+          <caption className="sr-only">Bow by three models at 25&nbsp;°C, device side up, centre high positive</caption>
           <thead>
             <tr>
               <th scope="col">Model</th>

@@ -13,6 +13,7 @@ import { FILM_KINDS } from "#app/engine/flow/model.ts";
 import { SOURCE_KINDS } from "#app/engine/vocabulary.ts";
 import { readQuantity } from "#app/lib/read-quantity.ts";
 import { RULES } from "#app/schemas/ranges.ts";
+import { Understood } from "#app/components/units/Understood.tsx";
 
 interface Props {
   /** in this stack, as far as it is typed */
@@ -82,7 +83,7 @@ export function FilmDialog({ thickness, onAdded, onClose }: Props) {
           />
           <QuantityField
             field={part("stress")}
-            label="Stress at 25 °C"
+            label="Stress at 25&nbsp;°C"
             dimension="stress"
             rule={RULES.stress}
             example="-80 MPa"
@@ -94,7 +95,7 @@ export function FilmDialog({ thickness, onAdded, onClose }: Props) {
             value={thick}
             placeholder="5 µm"
             autoComplete="off"
-            hint={read.ok ? read.understood : "May be typed later"}
+            hint={read.ok ? <Understood text={read.understood} dimension="length" /> : "May be typed later"}
             error={read.ok || read.blank ? undefined : read.message}
             onChange={(event) => setThick(event.currentTarget.value)}
           />

@@ -24,7 +24,7 @@ export const FilmForces = memo(function FilmForces({ estimated, names }: Props) 
   return (
     <section className="border-t border-line px-4 py-3 tablet:px-6" aria-labelledby="forces">
       <h3 id="forces" className="font-semibold">
-        Film forces, 25 °C
+        Film forces, 25&nbsp;°C
       </h3>
       <div className="mt-1 overflow-x-auto" tabIndex={0} role="region" aria-label="Film forces">
         <table className="table">

@@ -87,7 +87,7 @@ function FilmStress({ film }: { film: FilmChoice }) {
   const sense = value > 0 ? "tension" : value < 0 ? "compression" : "no stress";
   return (
     <div className="text-label text-quiet">
-      <p>Stress at 25 °C</p>
+      <p>Stress at 25&nbsp;°C</p>
       <p className="text-lead font-medium text-ink">
         {formatMeasured(film.stress, "stress", { unit: "MPa", sign: true })}
       </p>

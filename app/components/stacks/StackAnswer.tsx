@@ -110,7 +110,7 @@ function figuresOf({ room, hot }: StackPanel, limits: SiteLimits): PanelFigure[]
   const force = (value: number) =>
     formatQuantity(value, "forcePerLength", { unit: "N/m", significant: 3, trim: true, sign: true });
   return [
-    shapeFigure(room, "25 °C"),
+    shapeFigure(room, "25\u00A0°C"),
     ...(hot ? [shapeFigure(hot, temperatureWords(hot.request.temperature_K ?? ROOM_TEMPERATURE))] : []),
     {
       label: "Stoney’s bow",

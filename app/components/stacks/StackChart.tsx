@@ -1,5 +1,6 @@
 import { memo, type ReactNode } from "react";
 import { WarpChart } from "#app/components/charts/WarpChart.tsx";
+import { useCsvMark } from "#app/components/units/own-units-context.ts";
 import type { SiteLimits } from "#app/engine/rules/limits.ts";
 import { warpChart, type ChartOthers } from "#app/lib/stack-chart.ts";
 import { stackCsv } from "#app/lib/stack-csv.ts";
@@ -37,9 +38,10 @@ const CsvLink = memo(function CsvLink({
   panel: { room, hot },
   overlay,
 }: Pick<Props, "name" | "panel" | "overlay">) {
+  const mark = useCsvMark();
   return (
     <a
-      href={dataAddress(stackCsv(name, room, { hot, overlay }))}
+      href={dataAddress(stackCsv(name, room, { hot, overlay }, mark))}
       download={`${fileName(name)}-warp.csv`}
       className="link text-label"
     >

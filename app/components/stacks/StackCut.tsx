@@ -78,7 +78,7 @@ function freeShape({ room: { request, answer } }: StackPanel, limits: SiteLimits
   const exaggeration = exaggerationOf([{ shape, diameter }]);
   const curled = shape.regime === "curled";
   return {
-    head: "Free at 25 °C",
+    head: "Free at 25\u00A0°C",
     note: curled ? "curled about one axis, ×1" : `${shapeWords(shape, limits.flatWithin.value)}, ×${exaggeration}`,
     diameter,
     shape: bowOf(shape),

@@ -89,7 +89,7 @@ function Films({ layers }: { layers: readonly DraftLayer[] }) {
             </th>
             <th scope="col">Covers</th>
             <th scope="col" className="num">
-              Stress at 25 °C
+              Stress at 25&nbsp;°C
             </th>
             <th scope="col">Source of stress</th>
           </tr>

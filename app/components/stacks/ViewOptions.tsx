@@ -3,6 +3,7 @@ import { useSearchParams } from "react-router";
 import { SelectField } from "#app/components/ui/SelectField.tsx";
 import { TextField } from "#app/components/ui/TextField.tsx";
 import type { StackView } from "#app/lib/stack-view.ts";
+import { Understood } from "#app/components/units/Understood.tsx";
 
 interface Props {
   view: StackView;
@@ -59,7 +60,13 @@ function Options({ view, others, typed }: Props) {
         className="w-36"
         defaultValue={view.at}
         placeholder="245 °C"
-        hint={typed.understood ?? "25 °C is always shown"}
+        hint={
+          typed.understood ? (
+            <Understood text={typed.understood} dimension="temperature" />
+          ) : (
+            <>25&nbsp;°C is always shown</>
+          )
+        }
         error={typed.fault}
         autoComplete="off"
         onInput={(event) => typed.onType(event.currentTarget.value)}

@@ -7,6 +7,7 @@ import { stackOf } from "#app/lib/stack-of-request.ts";
 import { spreadSentences, type Estimated } from "#app/lib/stack-words.ts";
 import { RULES } from "#app/schemas/ranges.ts";
 import { useWarpSampling } from "./use-warp-sampling.ts";
+import { Understood } from "#app/components/units/Understood.tsx";
 
 const FIRST_LIMIT = "400 µm";
 
@@ -42,7 +43,7 @@ export function WarpSpread({ estimated: { request, answer } }: { estimated: Esti
               label="Largest warp"
               className="w-36"
               value={typed}
-              hint={limit.ok ? limit.understood : undefined}
+              hint={limit.ok ? <Understood text={limit.understood} dimension="length" /> : undefined}
               error={limit.ok ? undefined : limit.message}
               autoComplete="off"
               onChange={(event) => setTyped(event.currentTarget.value)}

@@ -47,7 +47,7 @@ export function stackColumns(exaggeration: number, flatWithin: number): Column<S
     { key: "films", head: "Films", numeric: true, wide: true, cell: ({ films }) => films },
     {
       key: "bow",
-      head: "Free at 25 °C",
+      head: "Free at 25\u00A0°C",
       unit: `×${exaggeration}`,
       wide: true,
       cell: (row) => <RowBow row={row} exaggeration={exaggeration} width={84} height={36} />,

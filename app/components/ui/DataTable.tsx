@@ -1,6 +1,7 @@
 import type { ReactNode } from "react";
 import { Link, useSearchParams } from "react-router";
 import { PAGE_SIZE, withParams, type ListPage } from "#app/lib/list-params.ts";
+import { OwnFigure, OwnHead, useOwnText } from "#app/components/units/OwnFigure.tsx";
 
 export interface Column<Row> {
   key: string;
@@ -24,6 +25,7 @@ interface Props<Row> {
 /** A list that sorts by its heads and pages at its foot, both through the address. */
 export function DataTable<Row>({ caption, columns, page, rowKey }: Props<Row>) {
   const { params, rows, total } = page;
+  const own = useOwnText();
   const [search] = useSearchParams();
   const align = ({ numeric, wide }: Column<Row>) =>
     `${numeric ? "num" : ""} ${wide ? "max-tablet:hidden print:table-cell" : ""}`;
@@ -46,13 +48,17 @@ export function DataTable<Row>({ caption, columns, page, rowKey }: Props<Row>) {
                         className="text-inherit no-underline"
                         preventScrollReset
                       >
-                        {column.head}
+                        {own(column.head)}
                         {current && <SortSign descending={params.descending} />}
                       </Link>
                     ) : (
                       column.head
                     )}
-                    {column.unit && <span className="block font-normal text-quiet">{column.unit}</span>}
+                    {column.unit && (
+                      <span className="block font-normal text-quiet">
+                        <OwnHead unit={column.unit} />
+                      </span>
+                    )}
                   </th>
                 );
               })}
@@ -63,7 +69,7 @@ export function DataTable<Row>({ caption, columns, page, rowKey }: Props<Row>) {
               <tr key={rowKey(row)}>
                 {columns.map((column) => (
                   <td key={column.key} className={align(column)}>
-                    {column.cell(row)}
+                    {column.unit ? <OwnFigure unit={column.unit}>{column.cell(row)}</OwnFigure> : column.cell(row)}
                   </td>
                 ))}
               </tr>

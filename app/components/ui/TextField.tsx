@@ -1,4 +1,5 @@
 import { useId, type InputHTMLAttributes, type ReactNode } from "react";
+import { Verbatim } from "#app/components/units/Understood.tsx";
 
 interface Props extends Omit<InputHTMLAttributes<HTMLInputElement>, "id"> {
   name: string;
@@ -16,7 +17,7 @@ export function TextField({ label, hint, error, className = "", ...input }: Prop
     <div className={`field ${className}`}>
       <label htmlFor={id}>{label}</label>
       <input {...input} id={id} aria-invalid={error ? true : undefined} aria-describedby={described} />
-      <small id={`${id}-note`}>{error ?? hint}</small>
+      <small id={`${id}-note`}>{error === undefined ? hint : <Verbatim>{error}</Verbatim>}</small>
     </div>
   );
 }

@@ -3,6 +3,7 @@ import { formatWithUncertainty } from "#app/engine/units/format.ts";
 import { angleText } from "#app/lib/angle-text.ts";
 import { withoutUnit } from "#app/lib/format-measured.ts";
 import type { ScanLine } from "#app/schemas/wafer-page.ts";
+import { OwnFigure, OwnHead } from "#app/components/units/OwnFigure.tsx";
 
 /** The scans that the figures of a wafer come from. */
 export function ScanLines({ scans }: { scans: ScanLine[] }) {
@@ -24,7 +25,10 @@ export function ScanLines({ scans }: { scans: ScanLine[] }) {
                 Change<span className="block font-normal text-quiet">1/km, k = 2</span>
               </th>
               <th scope="col" className="num">
-                Stress<span className="block font-normal text-quiet">MPa, k = 2</span>
+                Stress
+                <span className="block font-normal text-quiet">
+                  <OwnHead unit="MPa, k = 2" />
+                </span>
               </th>
               <th scope="col" className="max-tablet:hidden print:table-cell">
                 Instrument
@@ -49,9 +53,11 @@ export function ScanLines({ scans }: { scans: ScanLine[] }) {
                   )}
                 </td>
                 <td className="num">
-                  {withoutUnit(
-                    formatWithUncertainty(stress.value, stress.uncertainty, "stress", { unit: "MPa", sign: true }),
-                  )}
+                  <OwnFigure unit="MPa">
+                    {withoutUnit(
+                      formatWithUncertainty(stress.value, stress.uncertainty, "stress", { unit: "MPa", sign: true }),
+                    )}
+                  </OwnFigure>
                 </td>
                 <td className="max-tablet:hidden print:table-cell">
                   {instrument ?? <span className="text-quiet">not named</span>}

@@ -58,7 +58,7 @@ function filmExpansion(film: FilmInput, stress: number): Expansion {
   if (!(zero > ROOM_TEMPERATURE))
     throw new EngineInputError(
       `${film.name}.zeroStressTemperature`,
-      "must lie above 25 °C",
+      "must lie above 25\u00A0°C",
       `above ${ROOM_TEMPERATURE} K`,
     );
   const modulus = film.youngsModulus.value / (1 - film.poissonsRatio.value);

@@ -139,7 +139,7 @@ export function carrierExpansionWorking(
   return questionWorking({
     answer: carrierExpansionFor(flow, step, sagitta, range),
     figure: {
-      meaning: `centre to rim at 25 °C after step ${step}, positive for a bowl`,
+      meaning: `centre to rim at 25\u00A0°C after step ${step}, positive for a bowl`,
       unit: "m",
       dimension: "length",
     },

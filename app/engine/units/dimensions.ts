@@ -64,6 +64,7 @@ export const DIMENSIONS = {
       ]),
       unit("psi", "lbf/in^2"),
       unit("ksi", "lbf/in^2", [], 1000),
+      unit("Msi", "lbf/in^2", [], 1e6),
     ],
     use: "Pa, kPa, MPa, GPa, dyn/cm2 or psi",
   },

@@ -1,7 +1,7 @@
 import type { Measured } from "#app/engine/measured.ts";
 import { fromSi, stepFromSi } from "#app/engine/units/convert.ts";
 import { findUnit, type Dimension } from "#app/engine/units/dimensions.ts";
-import { csvCell } from "../stack-csv.ts";
+import { csvOf, type CsvMark } from "../csv.ts";
 import {
   allHeads,
   given,
@@ -12,14 +12,14 @@ import {
   type MeasuredColumns,
 } from "./columns.ts";
 
-/** Films as a table with a point as decimal mark, which reads back as the same films. Blank where nothing is given. */
-export function filmsCsv(films: readonly FilmState[]): string {
+/** Films as a table, which reads back as the same films whatever its decimal mark. Blank where nothing is given. */
+export function filmsCsv(films: readonly FilmState[], mark?: CsvMark): string {
   const heads = allHeads();
   const lines = films.map((film) => {
     const cells = cellsOf(film);
-    return heads.map((head) => csvCell(cells.get(head) ?? "")).join(",");
+    return heads.map((head) => cells.get(head) ?? "");
   });
-  return [heads.join(","), ...lines].map((line) => `${line}\r\n`).join("");
+  return csvOf([heads, ...lines], mark);
 }
 
 /** What each column says of a film, numbers in the unit of its head. */

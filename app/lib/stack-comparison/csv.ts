@@ -1,5 +1,5 @@
 import { ROOM_TEMPERATURE } from "#app/engine/laminate/layer.ts";
-import { csvCell } from "../stack-csv.ts";
+import { csvOf, type CsvMark } from "../csv.ts";
 import type { ComparedStack } from "./figures.ts";
 
 const HEAD = ["part", "stack", "film", "quantity", "silicon_thickness_um", "value", "unit"];
@@ -10,12 +10,11 @@ const micro = (si: number) => Number((si * 1e6).toPrecision(12));
 const mega = (si: number) => Number((si / 1e6).toPrecision(12));
 
 /**
- * A comparison as CSV with a point as decimal mark, one value a row: inputs, then figures, then curves. Text that a spreadsheet would
- * run as a formula is defused.
+ * A comparison as CSV, one value a row: inputs, then figures, then curves.
  */
-export function comparisonCsv(stacks: readonly ComparedStack[]): string {
+export function comparisonCsv(stacks: readonly ComparedStack[], mark?: CsvMark): string {
   const rows = [...stacks.flatMap(inputRows), ...stacks.flatMap(figureRows), ...stacks.flatMap(curveRows)];
-  return [HEAD, ...rows].map((cells) => `${cells.map(csvCell).join(",")}\r\n`).join("");
+  return csvOf([HEAD, ...rows], mark);
 }
 
 /** Two programs may have a stack of the same name: the letter tells the columns apart. */

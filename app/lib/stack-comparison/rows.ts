@@ -82,7 +82,7 @@ function filmRows({ places, key }: FilmSlot, stacks: readonly ComparedStack[]): 
       note: thickness.tolerance === null ? "no tolerance" : thickness.source,
       same: sameMeasured(thickness),
     })),
-    row("stress", "Stress at 25 °C", ({ stress }) => ({
+    row("stress", "Stress at 25\u00A0°C", ({ stress }) => ({
       text: formatMeasured(stress, "stress", { unit: "MPa", sign: true }),
       note: stress.tolerance === null ? `${stress.source}, no tolerance` : stress.source,
       same: sameMeasured(stress),

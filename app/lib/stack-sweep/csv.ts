@@ -1,7 +1,7 @@
 import { fromSi } from "#app/engine/units/convert.ts";
 import { findUnit, type Dimension } from "#app/engine/units/dimensions.ts";
 import type { DrawnAxis, DrawnCurve, DrawnMap, SweptView } from "#app/schemas/stack-sweep.ts";
-import { csvCell } from "../stack-csv.ts";
+import { csvOf, type CsvMark } from "../csv.ts";
 import type { SweepAnswer } from "./answers.ts";
 import { valueAt } from "./axis.ts";
 import { placeState, STATE_WORDS } from "./place-words.ts";
@@ -12,15 +12,15 @@ const UNITS: Partial<Record<Dimension, string>> = { length: "µm", stress: "MPa"
 type Row = (string | number)[];
 
 /**
- * A sweep as CSV with a point as decimal mark: one row for each place of the curve or of the map, with how it lies. An answer that
+ * A sweep as CSV: one row for each place of the curve or of the map, with how it lies. An answer that
  * there is not is left blank.
  */
-export function sweepCsv({ drawn }: SweptView, answer: SweepAnswer): string {
+export function sweepCsv({ drawn }: SweptView, answer: SweepAnswer, mark?: CsvMark): string {
   const unit = UNITS[answer.rule.dimension] ?? "";
   const of = (value: number | null) => (value === null ? "" : inUnit(value, answer.rule.dimension, unit));
   const head = `${answer.label}, ${unit}`;
   const rows = drawn.kind === "curve" ? curveRows(drawn, head, of) : mapRows(drawn, head, of);
-  return rows.map((cells) => `${cells.map(csvCell).join(",")}\r\n`).join("");
+  return csvOf(rows, mark);
 }
 
 type Of = (value: number | null) => string | number;

@@ -17,8 +17,9 @@ export async function action({ request, context }: Route.ActionArgs) {
   const { submission } = await readForm(request, preferencesFormSchema);
   if (submission.status !== "success")
     throw problem(400, "These preferences could not be read. Open the page again and choose from it.");
-  const { theme, density, singleKeys } = submission.value;
-  await savePreferences(scopeOf(context), { theme, density, singleKeys: singleKeys === "on" });
+  const scope = scopeOf(context);
+  const given = Object.entries(submission.value).filter(([, value]) => value !== undefined);
+  await savePreferences(scope, { ...(await preferencesFor(scope)), ...Object.fromEntries(given) });
   // The page that says so is drawn by them already.
   throw redirect("/preferences?saved");
 }

@@ -2,7 +2,7 @@ import type { EntityManager } from "@mikro-orm/postgresql";
 import { Scan } from "#app/db/entities/scan.ts";
 import { Wafer } from "#app/db/entities/wafer.ts";
 import { matchScans } from "#app/engine/profile/match-scans.ts";
-import { profilesCsv } from "#app/lib/reading-csv.ts";
+import type { KeptProfile } from "#app/lib/reading-csv.ts";
 import type { FilmChoice, FilmOnWafer, ScanLine, WaferPage } from "#app/schemas/wafer-page.ts";
 import { notFound } from "#app/server/problem.server.ts";
 import { inScope, type ActorScope } from "#app/server/scope.server.ts";
@@ -39,7 +39,7 @@ export async function getWaferProfiles(
   scope: ActorScope,
   id: string | undefined,
   key: string | null,
-): Promise<{ name: string; csv: string }> {
+): Promise<{ name: string; profiles: KeptProfile[] }> {
   return inScope(scope, async (em) => {
     const { wafer, chosen } = await chosenFilm(em, scope, id, key);
     const tools: KnownTools = new Map();
@@ -53,7 +53,7 @@ export async function getWaferProfiles(
       for (const z of [before, after]) profiles.push({ along: "position" as const, x: [...x], z: [...z] });
     }
     if (profiles.length === 0) throw notFound("profile of this wafer");
-    return { name: wafer.name, csv: profilesCsv(profiles) };
+    return { name: wafer.name, profiles };
   });
 }
 

@@ -1,5 +1,6 @@
 import { randomUUID } from "node:crypto";
 import type { EntityManager } from "@mikro-orm/postgresql";
+import type { CsvMark } from "#app/lib/csv.ts";
 import { DEFAULT_PREFERENCES, type Preferences } from "#app/lib/preferences.ts";
 import type { Mine, SavedFilterRow } from "#app/schemas/kept.ts";
 import { preferencesSchema } from "#app/schemas/preference.ts";
@@ -39,6 +40,11 @@ function preferencesOf(stored: unknown): Preferences {
 /** How the person wants pages that stand outside of the frame, such as a sheet on the screen. */
 export async function preferencesFor(scope: ActorScope): Promise<Preferences> {
   return (await mineOf(scope)).preferences;
+}
+
+/** How the person wants figures in a file for a spreadsheet. */
+export async function csvMarkOf(scope: ActorScope): Promise<CsvMark> {
+  return (await preferencesFor(scope)).decimalMark;
 }
 
 /** Keeps the preferences of the person. */

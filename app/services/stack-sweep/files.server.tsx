@@ -1,4 +1,5 @@
 import { SweepFile } from "#app/components/stacks/sweep/SweepFile.tsx";
+import type { CsvMark } from "#app/lib/csv.ts";
 import { answerOf } from "#app/lib/stack-sweep/answers.ts";
 import { sweepCsv } from "#app/lib/stack-sweep/csv.ts";
 import type { ActorScope } from "#app/server/scope.server.ts";
@@ -10,12 +11,12 @@ export async function sweepFile(
   scope: ActorScope,
   id: string | undefined,
   search: URLSearchParams,
-): Promise<{ name: string; csv: () => string; svg: () => string }> {
+): Promise<{ name: string; csv: (mark?: CsvMark) => string; svg: () => string }> {
   const { name, stack, swept } = await sweptStack(scope, id, search);
   const answer = answerOf(swept.answer);
   return {
     name,
-    csv: () => (answer ? sweepCsv(swept, answer) : ""),
+    csv: (mark) => (answer ? sweepCsv(swept, answer, mark) : ""),
     svg: () => svgFile(<SweepFile stack={stack} swept={swept} />),
   };
 }

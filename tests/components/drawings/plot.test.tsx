@@ -64,7 +64,9 @@ describe("warp against thickness", () => {
   it("spans the curves on two logarithmic axes, with decades of warp and 1, 2, 5 of thickness", () => {
     expect(plot.x).toMatchObject({ scale: "log", from: 20e-6 });
     expect(plot.x.ticks.map((tick) => tick.text)).toEqual(["20", "50", "100", "200", "500", "775"]);
-    expect(plot.y.ticks.map((tick) => tick.text)).toEqual(["1 mm", "10 mm", "100 mm"].slice(0, plot.y.ticks.length));
+    expect(plot.y.ticks.map((tick) => tick.text)).toEqual(
+      ["1\u00a0mm", "10\u00a0mm", "100\u00a0mm"].slice(0, plot.y.ticks.length),
+    );
     expect(plot.y.scale).toBe("log");
   });
 

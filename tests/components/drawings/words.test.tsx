@@ -79,15 +79,20 @@ describe("answer line", () => {
     );
     expect(markup.match(/<h1[^>]*>(<span class="block">[^<]*<\/span>){2}<\/h1>/)).not.toBeNull();
     expect(words(markup)).toMatch(/^Caution first at step 12 Clear as planned/);
-    expect(markup).toContain("343\u00a0±\u00a0120\u00a0µm");
+    expect(markup).toContain("343\u00a0±\u00a0120\ufeff\u00a0µm");
     expect(markup).toContain('<a href="#w">Working</a>');
   });
 });
 
 describe("no-break spaces", () => {
   it("tie value to unit and both sides of ±", () => {
-    expect(noBreak("343 ± 120 µm at 25 °C")).toBe("343\u00a0±\u00a0120\u00a0µm at 25\u00a0°C");
+    expect(noBreak("343 ± 120 nm at 25 K")).toBe("343\u00a0±\u00a0120\u00a0nm at 25\u00a0K");
     expect(noBreak("54 N/m, 86 % of 3.0 ppm/K")).toBe("54\u00a0N/m, 86\u00a0% of 3.0\u00a0ppm/K");
+  });
+
+  it("leave a mark where an ordinary one was written before a unit that a reader may have in another", () => {
+    expect(noBreak("343 ± 120 µm at 25 °C")).toBe("343\u00a0±\u00a0120\ufeff\u00a0µm at 25\ufeff\u00a0°C");
+    expect(noBreak("343 ± 120\u00a0µm")).toBe("343\u00a0±\u00a0120\u00a0µm");
   });
 
   it("leave words alone that only begin like a unit", () => {

@@ -40,9 +40,9 @@ describe("rows of inputs", () => {
 
   it("differ by value, tolerance and cut, and by nothing else", () => {
     const one = stack("A", [layer()]);
-    expect(differing(one, stack("B", [layer({ MPa: 210 })]))).toEqual(["Stress at 25 °C", "Force per width"]);
+    expect(differing(one, stack("B", [layer({ MPa: 210 })]))).toEqual(["Stress at 25\u00a0°C", "Force per width"]);
     expect(differing(one, stack("B", [layer({ coverage: 0.5 })]))).toEqual(["Covers", "Force per width"]);
-    expect(differing(one, stack("B", [layer({ tolerance: 10 })]))).toEqual(["Thickness", "Stress at 25 °C"]);
+    expect(differing(one, stack("B", [layer({ tolerance: 10 })]))).toEqual(["Thickness", "Stress at 25\u00a0°C"]);
     expect(differing(one, stack("B", [layer()], { um: 250, tolerance: 3 }))).toEqual(["Remaining thickness"]);
   });
 

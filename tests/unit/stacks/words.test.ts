@@ -4,7 +4,7 @@ import { describe, expect, it } from "vitest";
 import { warpPlot } from "#app/components/drawings/warp-plot.ts";
 import { defaultLimits } from "#app/engine/rules/limits.ts";
 import { drawnCurve, warpChart } from "#app/lib/stack-chart.ts";
-import { csvCell, stackCsv } from "#app/lib/stack-csv.ts";
+import { stackCsv } from "#app/lib/stack-csv.ts";
 import { viewTemperature } from "#app/lib/stack-view.ts";
 import {
   againstFreeWafer,
@@ -249,23 +249,6 @@ describe("the file of a curve", () => {
     });
     expect(data[120]?.["temperature_K"]).toBe("518.15");
     expect(data[240]?.["stack"]).toBe("'=cmd");
-  });
-
-  it.each([
-    ["=1+1", "'=1+1"],
-    ["+1", "'+1"],
-    ["-x", "'-x"],
-    ["@a", "'@a"],
-    ["\tx", "'\tx"],
-    ["plain", "plain"],
-    ['a "b"', '"a ""b"""'],
-    ["a,b", '"a,b"'],
-  ])("turns %j into %j", (text, cell) => {
-    expect(csvCell(text)).toBe(cell);
-  });
-
-  it("spares numbers, negative ones too", () => {
-    expect(csvCell(-12.5)).toBe("-12.5");
   });
 });
 

@@ -1,3 +1,4 @@
+import { useOwnText } from "#app/components/units/OwnFigure.tsx";
 import { colour } from "#app/components/drawings/colour.ts";
 import { coordinate } from "#app/components/drawings/coordinate.ts";
 import { formatQuantity } from "#app/engine/units/format.ts";
@@ -7,6 +8,7 @@ const [WIDTH, HEIGHT] = [320, 120];
 
 /** A profile as it was read, drawn into its own range, with the ends of both axes in words. */
 export function FileTrace({ profile: { name, points, trace } }: { profile: ToldProfile }) {
+  const own = useOwnText();
   const [xs, zs] = [trace.map(({ x }) => x), trace.map(({ z }) => z)];
   const [left, right] = [Math.min(...xs), Math.max(...xs)];
   const [low, high] = [Math.min(...zs), Math.max(...zs)];
@@ -21,7 +23,7 @@ export function FileTrace({ profile: { name, points, trace } }: { profile: ToldP
         viewBox={`-1 -3 ${WIDTH + 2} ${HEIGHT + 6}`}
         className="w-full border border-line"
         role="img"
-        aria-label={`Plot of ${name}: heights ${µm(low)} to ${µm(high)} over ${mm(left)} to ${mm(right)}`}
+        aria-label={own(`Plot of ${name}: heights ${µm(low)} to ${µm(high)} over ${mm(left)} to ${mm(right)}`)}
       >
         <path d={path} fill="none" stroke={colour("copper")} strokeWidth="1.5" strokeLinejoin="round" />
       </svg>

@@ -31,7 +31,7 @@ export function CompareOptions({ view, faults }: { view: ComparisonView; faults:
         className="w-32"
         defaultValue={asked.at}
         placeholder="25 °C"
-        hint="blank: 25 °C"
+        hint="blank: 25&nbsp;°C"
         error={faults.at}
         autoComplete="off"
       />
@@ -41,7 +41,7 @@ export function CompareOptions({ view, faults }: { view: ComparisonView; faults:
         className="w-32"
         defaultValue={asked.from}
         placeholder="20 µm"
-        hint="blank: 20 µm"
+        hint="blank: 20&nbsp;µm"
         error={faults.from}
         autoComplete="off"
       />

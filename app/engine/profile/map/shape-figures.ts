@@ -195,11 +195,11 @@ function scopeRemarks(radius: number, thickness: number): string[] {
   const remarks: string[] = [];
   if (thickness < WARP_FROM)
     remarks.push(
-      "Below about 100 µm these methods are outside their scope (SEMI MF1390, MF1451): say how the wafer was held when you quote the figures.",
+      "Below about 100\u00A0µm these methods are outside their scope (SEMI MF1390, MF1451): say how the wafer was held when you quote the figures.",
     );
   else if (thickness < BOW_FROM || (2 * radius) / thickness > BOW_SLENDER)
     remarks.push(
-      "Bow by SEMI MF534 is for wafers of at least 180 µm and at most 250 times as wide as thick (from memory): warp and sori stand, bow is outside its scope.",
+      "Bow by SEMI MF534 is for wafers of at least 180\u00A0µm and at most 250 times as wide as thick (from memory): warp and sori stand, bow is outside its scope.",
     );
   if (2 * radius < WARP_DIAMETER)
     remarks.push("Warp by SEMI MF1390 is for wafers of at least 50 mm (from memory): outside its scope.");

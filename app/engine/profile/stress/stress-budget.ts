@@ -158,7 +158,7 @@ function toolLines(i: StressBudgetInput, stress: number, perCurvature: number): 
       contribution: sameTool ? 0 : Math.SQRT2 * Math.abs(perCurvature) * offset.standardUncertainty,
       shared: sameTool ? "common, cancels" : "each scan its own",
       note: sameTool
-        ? `The same in both scans; alone it would give ${Math.round((Math.abs(perCurvature) * offset.standardUncertainty) / 1e5) / 10} MPa.`
+        ? `The same in both scans; alone it would give ${Math.round((Math.abs(perCurvature) * offset.standardUncertainty) / 1e5) / 10}\u00A0MPa.`
         : "Two tools, or one calibrated anew between: it does not cancel.",
     });
   }

@@ -201,8 +201,8 @@ describe("bow, warp and sori", () => {
     const surface = fitSurface({ ...wafer, scans: scansOf((x) => x * x, [0, 60, 120]), order: 2 });
     const at = (waferThickness: number, gravity: "included" | "cancelled by turning over") =>
       shapeFigures({ surface, radius: 0.15, waferThickness, gravity }).remarks.join(" ");
-    expect(at(80e-6, "included")).toMatch(/Below about 100 µm .* own weight is in these figures/);
-    expect(at(150e-6, "cancelled by turning over")).toMatch(/at least 180 µm/);
+    expect(at(80e-6, "included")).toMatch(/Below about 100\u00a0µm .* own weight is in these figures/);
+    expect(at(150e-6, "cancelled by turning over")).toMatch(/at least 180\u00a0µm/);
     expect(at(775e-6, "cancelled by turning over")).not.toMatch(/Below about|at least 50 mm/);
   });
 });
