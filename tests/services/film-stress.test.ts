@@ -306,7 +306,7 @@ test("assessments that used the old value are out of date by an acceptance, and 
   const { whatChanged } = await changes();
   const changed = await whatChanged(engineer, id);
   expect(changed?.changes).toMatchObject([
-    { subject: FILM, property: "Stress at 25 °C, tension positive", by: engineer.actor.name },
+    { subject: FILM, property: "Stress at 25\u00A0°C, tension positive", by: engineer.actor.name },
   ]);
   expect(changed?.movement).toMatchObject({ outcome: "computed" });
 }, 30_000);
