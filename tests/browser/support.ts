@@ -81,6 +81,9 @@ function waitForScripts(page: Page): void {
 const REFUSED =
   /^Failed to load resource: (the server responded with a status of (4\d\d)|net::ERR_INTERNET_DISCONNECTED)/;
 
+/** Playwright's own remark about what its settings switch off. */
+const BLOCKED = "Service Worker registration blocked by Playwright";
+
 /**
  * Playwright's test with an eye on the page: a script that fails or complains fails the test. `refusals: true` lets the browser
  * remark on answers of 400 to 499, for tests that ask for them.
@@ -98,6 +101,7 @@ export const test = base.extend<{ refusals: boolean; watched: void }>({
       page.on("console", (message) => {
         if (message.type() !== "error" && message.type() !== "warning") return;
         if (refusals && REFUSED.test(message.text())) return;
+        if (message.text() === BLOCKED) return;
         complaints.push(message.text());
       });
       await use();

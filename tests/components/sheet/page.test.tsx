@@ -87,7 +87,7 @@ describe("the list of sheets", () => {
   it("tells a guest that nothing is released yet, and nothing else", () => {
     const text = words(stub(() => <SheetList page={null} programs={[]} />));
     expect(text).toBe(
-      "Sheets Method: glossary No sheet has been released to you yet Handling-risk sheets of your programs appear here once they are checked and released.",
+      "Planeward Uncontrolled when printed Sheets Method: glossary No sheet has been released to you yet Handling-risk sheets of your programs appear here once they are checked and released.",
     );
   });
 
