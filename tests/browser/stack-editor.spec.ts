@@ -75,7 +75,7 @@ test.describe("an engineer", () => {
     await expect(thickness).toHaveValue("9 µm");
     await expect(thickness).toBeFocused();
 
-    await button(page, "Remove Polymer dielectric A").click();
+    await button(page, "Remove film: Polymer dielectric A").click();
     await inOrder(page, COPPER);
     await button(page, "Undo").click();
     await inOrder(page, POLYMER, COPPER);
