@@ -23,12 +23,6 @@ export async function editorFrames({ context }) {
   const silicon = page.getByLabel("Remaining silicon");
   await silicon.fill("100 µm");
   await page.waitForTimeout(2000);
-  await page.evaluate(() => {
-    globalThis.work = [];
-    new PerformanceObserver((list) => {
-      for (const { entryType, duration } of list.getEntries()) globalThis.work.push({ entryType, duration });
-    }).observe({ type: "long-animation-frame" });
-  });
   const device = await context.newCDPSession(page);
   await device.send("Performance.enable");
   const busy = async () => {
