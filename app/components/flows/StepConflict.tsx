@@ -1,7 +1,8 @@
 import { Link } from "react-router";
+import { ConflictTable } from "#app/components/forms/ConflictTable.tsx";
 import { LEAVE } from "#app/components/forms/UnsavedGuard.tsx";
 import { Notice } from "#app/components/ui/Notice.tsx";
-import type { FlowConflict, StepDifference } from "#app/schemas/flow-plan.ts";
+import type { FlowConflict } from "#app/schemas/flow-plan.ts";
 import { TheirChanges } from "./FlowConflictNotice.tsx";
 
 interface Props {
@@ -24,7 +25,7 @@ export function StepConflict({ conflict, theirs, onTakeTheirs }: Props) {
         <p className="mt-2">This step is no longer in the flow. Keep yours to put it back where it was.</p>
       )}
       {step?.length === 0 && <p className="mt-2">The step as you typed it and as it is saved are the same.</p>}
-      {Array.isArray(step) && step.length > 0 && <Differences differences={step} by={by} />}
+      {Array.isArray(step) && step.length > 0 && <ConflictTable rows={step} saved={`As it is saved, last by ${by}`} />}
       <p className="mt-2">Nothing is saved yet, and nothing that you typed is lost.</p>
       <div className="mt-3 flex flex-wrap gap-2">
         <button type="submit" className="btn">
@@ -35,33 +36,5 @@ export function StepConflict({ conflict, theirs, onTakeTheirs }: Props) {
         </Link>
       </div>
     </Notice>
-  );
-}
-
-function Differences({ differences, by }: { differences: StepDifference[]; by: string }) {
-  return (
-    <div className="mt-2 overflow-x-auto" tabIndex={0} role="region" aria-label="Where the two differ">
-      <table className="table border-t border-ink">
-        <caption className="sr-only">Where the two differ</caption>
-        <thead>
-          <tr>
-            <th scope="col">Field</th>
-            <th scope="col">Yours</th>
-            <th scope="col">As it is saved, last by {by}</th>
-          </tr>
-        </thead>
-        <tbody>
-          {differences.map(({ label, mine, theirs }) => (
-            <tr key={label}>
-              <th scope="row" className="font-normal">
-                {label}
-              </th>
-              <td>{mine}</td>
-              <td>{theirs}</td>
-            </tr>
-          ))}
-        </tbody>
-      </table>
-    </div>
   );
 }

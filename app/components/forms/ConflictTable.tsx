@@ -1,7 +1,13 @@
 import type { ConflictRow } from "#app/lib/record-conflict.ts";
 
+interface Props {
+  rows: readonly ConflictRow[];
+  /** head of the column of what is saved, with who saved it */
+  saved: string;
+}
+
 /** Two versions beside each other, where what was before them is not known. */
-export function ConflictTable({ rows, by }: { rows: readonly ConflictRow[]; by: string }) {
+export function ConflictTable({ rows, saved }: Props) {
   return (
     <div className="mt-2 overflow-x-auto" tabIndex={0} role="region" aria-label="Where the two differ">
       <table className="table border-t border-ink">
@@ -10,13 +16,15 @@ export function ConflictTable({ rows, by }: { rows: readonly ConflictRow[]; by: 
           <tr>
             <th scope="col">Field</th>
             <th scope="col">Yours</th>
-            <th scope="col">Saved by {by}</th>
+            <th scope="col">{saved}</th>
           </tr>
         </thead>
         <tbody>
           {rows.map(({ label, mine, theirs }) => (
             <tr key={label}>
-              <th scope="row">{label}</th>
+              <th scope="row" className="font-normal">
+                {label}
+              </th>
               <td>{mine}</td>
               <td>{theirs}</td>
             </tr>

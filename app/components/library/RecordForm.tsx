@@ -38,7 +38,9 @@ export function RecordForm<Values extends Record<string, unknown>>(props: Props<
       {lastResult && (
         <div ref={top} tabIndex={-1}>
           <FormHead lastResult={lastResult} />
-          {conflict && conflict.rows.length > 0 && <ConflictTable {...conflict} />}
+          {conflict && conflict.rows.length > 0 && (
+            <ConflictTable rows={conflict.rows} saved={`Saved by ${conflict.by}`} />
+          )}
         </div>
       )}
       {version !== null && <input type="hidden" name="version" value={version} />}

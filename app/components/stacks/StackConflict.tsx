@@ -43,7 +43,7 @@ export function StackConflict({ conflict, mine, opened, names, address, onTakeTh
         ) : rows.length > 0 ? (
           <>
             <p>Where the two differ:</p>
-            <ConflictTable rows={rows} by={by} />
+            <ConflictTable rows={rows} saved={`Saved by ${by}`} />
           </>
         ) : (
           <p>Both of you have made the same of it.</p>

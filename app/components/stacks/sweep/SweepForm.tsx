@@ -56,7 +56,7 @@ export function SweepForm({ view }: { view: SweepView }) {
           className="w-32"
           defaultValue={asked.at}
           placeholder="25 °C"
-          hint="blank: 25 °C"
+          hint="blank: 25&nbsp;°C"
           error={faults.at}
           autoComplete="off"
         />
