@@ -1,7 +1,8 @@
 /**
  * What the plain role may do, table by table; run after every migration, so that a new table without a line here is a table
  * that the application cannot touch. Audit, assessments, raw files, their readings, revisions of a flow and the stresses that films
- * had in use can only be added, and so is what came with the demo, which only the removal of the demo deletes; what was measured of a film or after a step can be set aside, not taken out.
+ * had in use can only be added, and so is what came with the demo, which only the removal of the demo deletes; what was measured of a film or after a step can be set aside, not taken out. Of a sheet everything is kept; what of a
+ * revision or a deviation may still move is the database's own rule.
  */
 const ADD_ONLY = [
   "assessment",
@@ -11,8 +12,12 @@ const ADD_ONLY = [
   "scan_reading",
   "film_stress_in_use",
   "demo_record",
+  "sheet_document",
+  "sheet_file",
+  "sheet_comment",
+  "sheet_print",
 ];
-const NEVER_TAKEN_OUT = ["film_stress_value", "step_measurement"];
+const NEVER_TAKEN_OUT = ["film_stress_value", "step_measurement", "sheet", "sheet_revision", "deviation"];
 const READ_AND_WRITE = [
   "person",
   "credential",

@@ -55,6 +55,11 @@ const SUBJECTS: Record<string, string> = {
   Wafer: "wafer",
   WaferScan: "placed scan",
   WaferMeasurement: "wafer measurement",
+  Sheet: "sheet",
+  SheetRevision: "revision of a sheet",
+  SheetComment: "comment in a review",
+  Deviation: "deviation",
+  SheetPrint: "print of a sheet",
 };
 
 /** Columns that say nothing to a reader, or that must not be copied. */
@@ -66,6 +71,7 @@ const LEFT_OUT = new Set([
   "createdBy",
   "updatedBy",
   "passwordHash",
+  "token",
   "bytes",
   "content",
   "input",

@@ -22,6 +22,13 @@ const PROGRAM_TABLES = [
   "wafer_measurement",
   "job",
   "step_measurement",
+  "sheet",
+  "sheet_revision",
+  "sheet_document",
+  "sheet_file",
+  "sheet_comment",
+  "deviation",
+  "sheet_print",
 ];
 const SITE_TABLES = [
   "film",

@@ -41,6 +41,13 @@ import { Tape } from "./tape.ts";
 import { Wafer } from "./wafer.ts";
 import { WaferMeasurement } from "./wafer-measurement.ts";
 import { WaferScan } from "./wafer-scan.ts";
+import { Sheet } from "./sheet.ts";
+import { SheetRevision } from "./sheet-revision.ts";
+import { SheetDocument } from "./sheet-document.ts";
+import { SheetFile } from "./sheet-file.ts";
+import { SheetComment } from "./sheet-comment.ts";
+import { Deviation } from "./deviation.ts";
+import { SheetPrint } from "./sheet-print.ts";
 
 /** Every entity, listed by hand: the ORM finds nothing by itself. */
 export const entities = [
@@ -66,6 +73,13 @@ export const entities = [
   StepTemplate,
   FlowTemplate,
   Assessment,
+  Sheet,
+  SheetRevision,
+  SheetDocument,
+  SheetFile,
+  SheetComment,
+  Deviation,
+  SheetPrint,
   ImportProfile,
   RepeatabilityStudy,
   ReferenceWafer,
