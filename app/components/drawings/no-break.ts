@@ -19,3 +19,8 @@ export function noBreak(text: string): string {
     .replace(/ ± /g, `${NO_BREAK_SPACE}±${NO_BREAK_SPACE}`)
     .replace(/(\bstep|\bsteps) (?=\d)/g, `$1${NO_BREAK_SPACE}`);
 }
+
+/** The same for a text that nobody reads in units of their own, such as that of a document: nothing but no-break spaces. */
+export function tieUnits(text: string): string {
+  return noBreak(text).replaceAll(WRITTEN, "");
+}

@@ -1,5 +1,4 @@
-export const CAUTION_SIGNS = ["estimate", "shards", "blade", "heat", "solvent", "laser", "vacuum", "run card"] as const;
-export type CautionSignName = (typeof CAUTION_SIGNS)[number];
+import type { CautionSignName } from "#app/lib/sheet/caution-signs.ts";
 
 /** Strokes on a field of 32 × 32, and what is filled. Drawn for this program; each stands beside its sentence. */
 const DRAWINGS: Record<CautionSignName, { lines: string; filled?: string }> = {

@@ -103,29 +103,36 @@ export async function findAssessment(em: EntityManager, scope: ActorScope, id: s
 
 /** One assessment, as it was stored. */
 export async function getAssessment(scope: ActorScope, id: string | undefined): Promise<AssessmentDetail> {
-  return inScope(scope, async (em) => {
-    const assessment = await findAssessment(em, scope, id);
-    const { program, flow, lot } = assessment;
-    const { input } = await presentFlow(em, scope, flow.id);
-    // A lot rests on its own figures and, for the rest, on what the assessment that it is of rests on.
-    const of = lot ? await findAssessment(em, scope, lot.of.id) : assessment;
-    return {
-      id: assessment.id,
-      number: assessment.number,
-      documentNumber: assessment.documentNumber,
-      flow: { id: flow.id, name: assessment.flowName },
-      program: { id: program.id, name: program.name, slug: program.slug },
-      engineVersion: assessment.engineVersion,
-      inputHash: assessment.inputHash,
-      createdAt: assessment.createdAt.toISOString(),
-      createdBy: assessment.createdBy.name,
-      result: assessment.result,
-      outOfDate: isOutOfDate(
-        { engineVersion: assessment.engineVersion, inputHash: of.inputHash, input: of.input.$ },
-        input,
-      ),
-      mayAssess: mayInProgram(scope.actor, "run assessments", program.id),
-      lot: lot ?? null,
-    };
-  });
+  return inScope(scope, (em) => assessmentDetail(em, scope, id));
+}
+
+/** The same inside a running transaction. */
+export async function assessmentDetail(
+  em: EntityManager,
+  scope: ActorScope,
+  id: string | undefined,
+): Promise<AssessmentDetail> {
+  const assessment = await findAssessment(em, scope, id);
+  const { program, flow, lot } = assessment;
+  const { input } = await presentFlow(em, scope, flow.id);
+  // A lot rests on its own figures and, for the rest, on what the assessment that it is of rests on.
+  const of = lot ? await findAssessment(em, scope, lot.of.id) : assessment;
+  return {
+    id: assessment.id,
+    number: assessment.number,
+    documentNumber: assessment.documentNumber,
+    flow: { id: flow.id, name: assessment.flowName },
+    program: { id: program.id, name: program.name, slug: program.slug },
+    engineVersion: assessment.engineVersion,
+    inputHash: assessment.inputHash,
+    createdAt: assessment.createdAt.toISOString(),
+    createdBy: assessment.createdBy.name,
+    result: assessment.result,
+    outOfDate: isOutOfDate(
+      { engineVersion: assessment.engineVersion, inputHash: of.inputHash, input: of.input.$ },
+      input,
+    ),
+    mayAssess: mayInProgram(scope.actor, "run assessments", program.id),
+    lot: lot ?? null,
+  };
 }

@@ -1,6 +1,6 @@
 import { describe, expect, it } from "vitest";
 import { Cautions } from "#app/components/cautions/Cautions.tsx";
-import { CAUTION_SIGNS } from "#app/components/method/CautionSign.tsx";
+import { CAUTION_SIGNS } from "#app/lib/sheet/caution-signs.ts";
 import { MethodView } from "#app/components/method/MethodView.tsx";
 import { leftOut } from "#app/lib/method-words.ts";
 import { EQUATIONS } from "#app/engine/equations.ts";
