@@ -1,0 +1,54 @@
+import { createHash } from "node:crypto";
+import type { EntityManager } from "@mikro-orm/postgresql";
+import type { Assessment } from "#app/db/entities/assessment.ts";
+import { SheetRevision } from "#app/db/entities/sheet-revision.ts";
+import { canonicalJson } from "#app/lib/canonical-json.ts";
+import type { ProgramPermission } from "#app/policies/permissions.ts";
+import { notFound } from "#app/server/problem.server.ts";
+import type { ActorScope } from "#app/server/scope.server.ts";
+import { requireInProgram } from "../permission.server.ts";
+import { idFrom } from "../uuid.server.ts";
+
+/**
+ * The revision that an id names, with its sheet and the people of it.
+ * @throws 404 for one that is not there or of a foreign program, 403 for a role that may not
+ */
+export async function findRevision(
+  em: EntityManager,
+  scope: ActorScope,
+  id: string | undefined,
+  permission: ProgramPermission = "see the work",
+) {
+  const revision = await em.findOne(
+    SheetRevision,
+    { id: idFrom(id, "revision of a sheet") },
+    { populate: ["sheet", "program", "askedBy", "decidedBy", "endedBy"] },
+  );
+  if (!revision) throw notFound("revision of a sheet");
+  requireInProgram(scope, permission, revision.program.id, "revision of a sheet");
+  return revision;
+}
+
+/** Waits until nobody else moves a revision of this flow's sheet, for the rest of the transaction. */
+export async function lockSheetOf(em: EntityManager, flowId: string): Promise<void> {
+  await em.execute("select pg_advisory_xact_lock(hashtextextended(?, 0))", [`sheet of ${flowId}`]);
+}
+
+const sha256 = (value: unknown) => createHash("sha256").update(canonicalJson(value)).digest("hex");
+
+/** What a review is bound to: fingerprints of an assessment's inputs and results as they are stored. */
+export function fingerprints(assessment: Pick<Assessment, "result"> & { input: { $: unknown } }) {
+  return { inputHash: sha256(assessment.input.$), resultHash: sha256(assessment.result) };
+}
+
+/** People of a program by id, for its staff. */
+export interface ProgramPerson {
+  id: string;
+  name: string;
+  role: "guest" | "technician" | "engineer" | "process owner";
+}
+
+/** The active people of a program; nobody for who is not of its staff. */
+export function peopleOf(em: EntityManager, programId: string): Promise<ProgramPerson[]> {
+  return em.execute<ProgramPerson[]>("select * from program_people(?) order by name", [programId]);
+}
