@@ -13,6 +13,7 @@ export default [
   ]),
   layout("routes/_print/layout.tsx", [
     route("sheets/:assessmentId", "routes/_print/sheet.tsx"),
+    route("sheets/:assessmentId/draft.pdf", "routes/_print/draft-pdf.ts"),
     route("assessments/change-request/print", "routes/_print/change-request.tsx"),
     route("stacks/compare/print", "routes/_print/comparison.tsx"),
     route("stacks/:stackId/sweep/print", "routes/_print/sweep.tsx"),

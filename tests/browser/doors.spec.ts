@@ -28,6 +28,7 @@ const DOORS: Record<string, string> = {
   "/api/v1/scans/:readingId": "401 404 200 200 200 200 404",
   "/api/v1/jobs/:jobId": "401 404 200 200 200 200 404",
   "/sheets/:assessmentId": "302 404 200 200 200 200 404",
+  "/sheets/:assessmentId/draft.pdf": "302 404 200 200 200 200 404",
   "/": "302 200 200 200 200 200 200",
   "/films": "302 403 200 200 200 200 200",
   "/films/new": "302 403 403 200 200 403 403",
