@@ -13,12 +13,12 @@ import { fontFile } from "./sheet-fonts.server.ts";
 
 const POINTS = 72 / 25.4;
 
-/** The bytes of the PDF. Two of the same document are the same, byte for byte, but for what the renderer adds of its own. */
+/** The bytes of the PDF; those of the same document are the same whenever it is drawn. */
 export async function renderSheetPdf(whole: SheetDocument, paper: Paper, pages: "hands" | "all"): Promise<Uint8Array> {
   registerFonts();
   const document = pages === "hands" ? handsOnly(whole) : whole;
   const made = new Date(document.dated);
-  return renderToBuffer(
+  const file = await renderToBuffer(
     <Document
       title={document.name}
       author={document.titleBlock.owner}
@@ -33,6 +33,7 @@ export async function renderSheetPdf(whole: SheetDocument, paper: Paper, pages: 
       <SheetPages kit={PDF_KIT} document={document} paper={paper} Page={PdfPage} />
     </Document>,
   );
+  return new Uint8Array(file);
 }
 
 function PdfPage(props: PageProps) {
@@ -48,6 +49,8 @@ function PdfPage(props: PageProps) {
         color: "#000000",
         paddingTop: `${MARGIN}mm`,
         paddingRight: `${MARGIN}mm`,
+        // A page that is not to be parted is as high as what it holds.
+        paddingBottom: `${MARGIN}mm`,
         paddingLeft: `${FILING_MARGIN}mm`,
       }}
     >
