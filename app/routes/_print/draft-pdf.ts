@@ -12,7 +12,7 @@ export async function loader({ context, params, url }: Route.LoaderArgs) {
   return new Response(new Uint8Array(bytes), {
     headers: {
       "Content-Type": "application/pdf",
-      "Content-Disposition": attachment(`${document.name}, draft.pdf`),
+      "Content-Disposition": attachment(`${document.name} draft.pdf`),
     },
   });
 }

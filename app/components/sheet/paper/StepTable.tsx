@@ -33,7 +33,7 @@ export function StepTable({ kit, steps, paper, diameter, exaggeration }: Props) 
     [["Finding"], STEP_COLUMNS.finding],
   ];
   return (
-    <Box className="sheet-scroll">
+    <Box role="region" label="Step table" scrolls>
       <Box role="table" label="Steps with their figures">
         <Box role="rowgroup">
           <Box

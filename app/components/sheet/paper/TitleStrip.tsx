@@ -52,6 +52,7 @@ export function TitleStrip({ kit, document, page, printedAt, height }: Props) {
         {ROWS.map((row, at) => (
           <Box
             key={at}
+            className="sheet-wide"
             style={{
               flexDirection: "row",
               height: mm(TITLE_STRIP.rows[at] ?? 8),

@@ -6,8 +6,15 @@ const css = (style: KitStyle | undefined): CSSProperties | undefined => style;
 
 /** The kit of the browser and of files that a browser opens. */
 export const DOM_KIT: Kit = {
-  Box: ({ style, role, label, span, className = "", children }) => (
-    <div className={`sheet-box ${className}`} style={css(style)} role={role} aria-label={label} aria-colspan={span}>
+  Box: ({ style, role, label, span, className = "", scrolls = false, children }) => (
+    <div
+      className={`sheet-box ${scrolls ? "sheet-scroll" : className}`}
+      style={css(style)}
+      role={role}
+      aria-label={label}
+      aria-colspan={span}
+      tabIndex={scrolls ? 0 : undefined}
+    >
       {children}
     </div>
   ),

@@ -51,6 +51,8 @@ export interface KitBox {
   span?: number;
   /** for the styles of narrow screens */
   className?: string;
+  /** scrolls sideways where a screen is too narrow for it, by keys as well */
+  scrolls?: boolean;
   children?: ReactNode;
 }
 
