@@ -55,6 +55,11 @@ export class Mail extends Migration {
          where p.active and p.id = any(people)
            and (app_at_work() or program in (select app_staff_programs())) $$`);
 
+    this.addSql(`
+      create function app_process_owners() returns table (program_id uuid, person_id uuid) ${definer} as $$
+        select m.program_id, m.person_id from membership m join person p on p.id = m.person_id
+         where app_at_work() and p.active and m.role = 'process owner' order by m.created_at, m.id $$`);
+
     this.addSql(`alter table "mail_outbox" enable row level security`);
     this.addSql(`create policy own on "mail_outbox" for select using (person_id = app_person())`);
     const lookedAfter = `program_id in (select app_outbox_programs()) or (program_id is null and (select app_is_administrator()))`;
@@ -82,5 +87,6 @@ export class Mail extends Migration {
     this.addSql(`drop table "mail_outbox" cascade`);
     this.addSql(`drop function mail_readers(uuid, uuid[])`);
     this.addSql(`drop function app_outbox_programs()`);
+    this.addSql(`drop function app_process_owners()`);
   }
 }
