@@ -404,7 +404,7 @@ describe("the digest", () => {
 });
 
 describe("the outbox", () => {
-  const LIST = { query: "", sort: "written", descending: false, page: 1, filters: {} };
+  const LIST = { query: "", sort: "written", descending: true, page: 1, filters: {} };
   const seen = async (person: (typeof PEOPLE)[number], changes = {}) =>
     (await (await outbox()).listOutbox(people[person], { ...LIST, ...changes })).rows;
 

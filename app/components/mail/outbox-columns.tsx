@@ -33,7 +33,7 @@ export const OUTBOX_COLUMNS: Column<OutboxRow>[] = [
     cell: ({ to, email }) => (
       <>
         <span className="wrap-anywhere">{to}</span>
-        <span className="block text-label wrap-anywhere text-quiet">{email}</span>
+        <span className="block text-label wrap-anywhere text-quiet max-tablet:hidden">{email}</span>
       </>
     ),
   },

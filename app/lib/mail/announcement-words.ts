@@ -125,7 +125,7 @@ function ofAssessment(announcement: Of<"assessment out of date">): AnnouncementW
   const { more } = announcement;
   const lines = announcement.changes.map(oneLine);
   return {
-    subject: `assessment ${assessment} of ${flow} is out of date`,
+    subject: `assessment ${assessment} is out of date`,
     sentence: `Assessment ${assessment} of the flow ${flow} rests on values that have changed since. Run it again before anybody relies on it.`,
     facts: [
       { label: "Assessment", value: assessment },
@@ -157,8 +157,8 @@ function ofFloor(announcement: Of<"incident" | "step stopped" | "lot held">): An
     case "step stopped": {
       const { flow, step } = { flow: oneLine(announcement.flow), step: oneLine(announcement.step) };
       return {
-        subject: `step ${step} is stopped`,
-        sentence: `${by} has stopped step ${step} of ${flow} for every lot. Nothing goes on there until the stop is cleared.`,
+        subject: `stopped, step ${step}`,
+        sentence: `${by} has stopped step ${step}, in the flow ${flow}, for every lot. Nothing goes on there until the stop is cleared.`,
         facts: [
           { label: "Step", value: step },
           { label: "Flow", value: flow },

@@ -18,11 +18,11 @@ function partText({ heading, sentence, facts, said, mind, link }: LetterPart): s
   const width = Math.max(...facts.map(({ label }) => label.length));
   const lines = said?.lines.map((line) => wrapped(line, "  ")) ?? [];
   return [
-    wrapped(heading.toUpperCase()),
+    wrapped(heading),
     wrapped(sentence),
     facts.map(({ label, value }) => `${`${label}:`.padEnd(width + 2)}${value}`).join("\n"),
     ...(said ? [`${said.heading}:\n${lines.join("\n")}`] : []),
-    ...(mind === null ? [] : [wrapped(`Mind: ${mind}`)]),
+    ...(mind === null ? [] : [wrapped(mind)]),
     `${link.words}:\n${link.address}`,
   ].join("\n\n");
 }

@@ -38,7 +38,7 @@ export async function listOutbox(scope: ActorScope, params: ListParams): Promise
       },
       {
         populate: ["program", "person"],
-        orderBy: [{ createdAt: descending ? "asc" : "desc" }, { id: "asc" }],
+        orderBy: [{ createdAt: descending ? "desc" : "asc" }, { id: "asc" }],
         limit: PAGE_SIZE,
         offset: (page - 1) * PAGE_SIZE,
       },

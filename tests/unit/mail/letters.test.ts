@@ -15,9 +15,9 @@ const SUBJECTS: Record<Announcement["kind"], string> = {
   "sheet released": "Tern: sheet TERN-S001 B released",
   "sheet superseded": "Tern: sheet TERN-S001 A superseded by B",
   "sheet withdrawn": "Tern: sheet TERN-S001 B withdrawn",
-  "assessment out of date": "Tern: assessment TERN-A003 of Tern T-2, to 100 µm is out of date",
+  "assessment out of date": "Tern: assessment TERN-A003 is out of date",
   incident: "Tern: incident with lot T-0412",
-  "step stopped": "Tern: step 14, debond is stopped",
+  "step stopped": "Tern: stopped, step 14, debond",
   "lot held": "Tern: lot T-0412 is held",
 };
 
@@ -85,7 +85,7 @@ test("a digest has everything of the day, each with its own link", () => {
   const letter = digestLetter(ANNOUNCEMENTS.slice(2, 6), WRITTEN);
   expect(letter.subject).toBe("Planeward, the day's digest: 4 things");
   const text = letterText(letter);
-  for (const { kind } of ANNOUNCEMENTS.slice(2, 6)) expect(spaced(text)).toContain(SUBJECTS[kind].toUpperCase());
+  for (const { kind } of ANNOUNCEMENTS.slice(2, 6)) expect(spaced(text)).toContain(SUBJECTS[kind]);
   expect(text).toContain("https://planeward.site.example/unsubscribe/token-of-a-person?kind=digest");
   expect(letterHtml(letter).match(/<h1/g)).toHaveLength(4);
 });

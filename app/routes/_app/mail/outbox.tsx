@@ -19,7 +19,11 @@ export const meta: Route.MetaFunction = () => [{ title: "Outbox · Planeward" }]
 
 export async function loader({ context, url }: Route.LoaderArgs) {
   const scope = scopeOf(context);
-  const params = readListParams(url.searchParams, { sorts: OUTBOX_SORTS, filters: ["program", "state"] });
+  const params = readListParams(url.searchParams, {
+    sorts: OUTBOX_SORTS,
+    filters: ["program", "state"],
+    descending: true,
+  });
   const page = withinPages(url, await listOutbox(scope, params));
   return {
     page,
