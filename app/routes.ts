@@ -3,7 +3,10 @@ import { index, layout, prefix, route, type RouteConfig } from "@react-router/de
 export default [
   route("healthz", "routes/healthz.ts"),
   route("readyz", "routes/readyz.ts"),
-  layout("routes/_public/layout.tsx", [route("sign-in", "routes/_public/sign-in.tsx")]),
+  layout("routes/_public/layout.tsx", [
+    route("sign-in", "routes/_public/sign-in.tsx"),
+    route("unsubscribe/:token", "routes/_public/unsubscribe.tsx"),
+  ]),
   route("sign-out", "routes/_auth/sign-out.ts"),
   ...prefix("api/v1", [
     route("estimates", "routes/api.v1/estimates.ts"),
@@ -115,6 +118,13 @@ export default [
     ]),
     route("demo", "routes/_app/demo.tsx"),
     route("preferences", "routes/_app/preferences.tsx"),
+    route("preferences/mail", "routes/_app/mail/choices.tsx"),
+    ...prefix("mail", [
+      index("routes/_app/mail/inbox.tsx"),
+      route("outbox", "routes/_app/mail/outbox.tsx"),
+      route(":mailId", "routes/_app/mail/mail.tsx"),
+      route(":mailId/html", "routes/_app/mail/html.ts"),
+    ]),
     route("favourites", "routes/_app/favourites.tsx"),
     route("saved-filters", "routes/_app/saved-filters.ts"),
     route("search", "routes/_app/search.tsx"),

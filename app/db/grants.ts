@@ -12,7 +12,7 @@ const ADD_ONLY = [
   "film_stress_in_use",
   "demo_record",
 ];
-const NEVER_TAKEN_OUT = ["film_stress_value", "step_measurement"];
+const NEVER_TAKEN_OUT = ["film_stress_value", "step_measurement", "mail_outbox"];
 const READ_AND_WRITE = [
   "person",
   "credential",
@@ -48,6 +48,7 @@ const READ_AND_WRITE = [
   "favourite",
   "saved_filter",
   "preference",
+  "mail_choice",
 ];
 
 /** SQL that gives the role its rights and nothing more. */

@@ -8,6 +8,7 @@ export const PROGRAM_PERMISSIONS = {
   "accept stresses": ["engineer", "process owner"],
   "edit stacks and flows": ["engineer", "process owner"],
   "run assessments": ["engineer", "process owner"],
+  "see the outbox": ["process owner", "administrator"],
 } as const satisfies Record<string, readonly (ProgramRole | SiteRole)[]>;
 
 /** Things done to what the whole site shares. A program role counts when it is held in any program. */

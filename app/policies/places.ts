@@ -29,6 +29,13 @@ const seesLibrary = (actor: Actor) => mayOnSite(actor, "see the library");
 const WITHIN: (Page & { open: (actor: Actor) => boolean })[] = [
   { name: "Favourites", path: "/favourites", also: "marked, starred", open: seesLibrary },
   { name: "Preferences", path: "/preferences", also: "theme, dark, density, settings", open: () => true },
+  { name: "E-mail", path: "/preferences/mail", also: "mail, digest, unsubscribe, notifications", open: () => true },
+  {
+    name: "Outbox",
+    path: "/mail/outbox",
+    also: "mail that waits, was sent or is parked",
+    open: (actor) => programsWhere(actor, "see the outbox").length > 0,
+  },
   { name: "Compare films", path: "/films/compare", open: seesLibrary },
   {
     name: "Import films",

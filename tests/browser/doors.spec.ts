@@ -22,6 +22,7 @@ const DOORS: Record<string, string> = {
   "/healthz": "200 200 200 200 200 200 200",
   "/readyz": "200 200 200 200 200 200 200",
   "/sign-in": "200 302 302 302 302 302 302",
+  "/unsubscribe/:token": "404 404 404 404 404 404 404",
   "/sign-out": "302 302 302 302 302 302 302",
   "/api/v1/estimates": "405 405 405 405 405 405 405",
   "/api/v1/scans": "405 405 405 405 405 405 405",
@@ -107,6 +108,11 @@ const DOORS: Record<string, string> = {
   "/import-profiles": "302 403 200 200 200 200 403",
   "/demo": "302 403 403 403 200 403 403",
   "/preferences": "302 200 200 200 200 200 200",
+  "/preferences/mail": "302 200 200 200 200 200 200",
+  "/mail": "302 200 200 200 200 200 200",
+  "/mail/outbox": "302 403 403 403 200 403 200",
+  "/mail/:mailId": "302 404 404 404 404 404 404",
+  "/mail/:mailId/html": "302 404 404 404 404 404 404",
   "/favourites": "302 200 200 200 200 200 200",
   "/saved-filters": "302 302 302 302 302 302 302",
   "/search": "302 200 200 200 200 200 200",
@@ -126,7 +132,10 @@ function addresses(entries: RouteConfigEntry[], above = ""): string[] {
 }
 
 /** What an address asks for that shows nothing without it. */
-const ASKED: Record<string, string> = { "/assessments/:assessmentId/working": "?step=14&shape=released" };
+const ASKED: Record<string, string> = {
+  "/assessments/:assessmentId/working": "?step=14&shape=released",
+  "/unsubscribe/:token": "?kind=digest",
+};
 
 /** Ids for an address: the step library has kinds of its own. */
 const idsFor = (address: string, ids: DoorIds): DoorIds =>

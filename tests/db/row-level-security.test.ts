@@ -22,6 +22,7 @@ const PROGRAM_TABLES = [
   "wafer_measurement",
   "job",
   "step_measurement",
+  "mail_outbox",
 ];
 const SITE_TABLES = [
   "film",
@@ -44,7 +45,7 @@ const SITE_TABLES = [
 ];
 
 /** What a person keeps for themselves. */
-const OWN_TABLES = ["recent_visit", "favourite", "saved_filter", "preference"];
+const OWN_TABLES = ["recent_visit", "favourite", "saved_filter", "preference", "mail_choice"];
 
 let engineer: ActorScope;
 let technician: ActorScope;
@@ -142,6 +143,7 @@ describe("what a person keeps for themselves", () => {
     favourite: ["kind, record_id, at", "'film', gen_random_uuid(), now()"],
     saved_filter: ["list, name, query, at", "'/films', 'metals', 'kind=metal', now()"],
     preference: ["value, at", "'{}', now()"],
+    mail_choice: ["value, unsubscribe_token, at", "'{}', gen_random_uuid()::text, now()"],
   };
   const insert = (table: string, person: string) => {
     const [names, values] = COLUMNS[table] ?? ["", ""];

@@ -23,6 +23,7 @@ const PROGRAM_TABLE: Record<keyof typeof PROGRAM_PERMISSIONS, string> = {
   "accept stresses": "    - - - y y -",
   "edit stacks and flows": "- - - y y -",
   "run assessments": "    - - - y y -",
+  "see the outbox": "     - - - - y y",
 };
 const SITE_TABLE: Record<keyof typeof SITE_PERMISSIONS, string> = {
   "see the library": "    - y y y y y",

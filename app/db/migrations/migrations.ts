@@ -19,6 +19,7 @@ import { Wafers } from "./2026-12-07-wafers.ts";
 import { Instruments } from "./2026-12-07-instruments.ts";
 import { FoundQuickly } from "./2026-12-08-found-quickly.ts";
 import { DemoComesAndGoes } from "./2026-12-09-demo-comes-and-goes.ts";
+import { Mail } from "./2026-12-10-mail.ts";
 
 /** Every migration in the order in which it runs. */
 export const migrations = [
@@ -43,4 +44,5 @@ export const migrations = [
   { name: "2026-12-07-step-measurements", class: StepMeasurements },
   { name: "2026-12-08-found-quickly", class: FoundQuickly },
   { name: "2026-12-09-demo-comes-and-goes", class: DemoComesAndGoes },
+  { name: "2026-12-10-mail", class: Mail },
 ];
