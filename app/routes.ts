@@ -32,6 +32,8 @@ export default [
     ...prefix("stacks", [
       index("routes/_app/stacks/list.tsx"),
       route("new", "routes/_app/stacks/new.tsx"),
+      route("duplicate", "routes/_app/stacks/duplicate.tsx"),
+      route("remove", "routes/_app/stacks/remove.tsx"),
       route("compare", "routes/_app/stacks/compare.tsx"),
       route("compare.csv", "routes/_app/stacks/compare-csv.ts"),
       route("compare.svg", "routes/_app/stacks/compare-svg.ts"),

@@ -39,6 +39,8 @@ const DOORS: Record<string, string> = {
   "/films/:filmId/stress.csv": "302 403 200 200 200 200 200",
   "/stacks": "302 403 200 200 200 200 403",
   "/stacks/new": "302 403 403 200 200 403 403",
+  "/stacks/duplicate": "302 403 403 200 200 403 403",
+  "/stacks/remove": "302 403 403 200 200 403 403",
   "/stacks/compare": "302 403 200 200 200 200 403",
   "/stacks/compare.csv": "302 403 400 400 400 400 403",
   "/stacks/compare.svg": "302 403 400 400 400 400 403",

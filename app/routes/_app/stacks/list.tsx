@@ -11,6 +11,7 @@ import { tickColumn } from "#app/components/ui/ticks/tick-column.tsx";
 import { useTicked } from "#app/components/ui/ticks/use-ticked.ts";
 import { readListParams } from "#app/lib/list-params.ts";
 import { MOST_STACKS } from "#app/lib/stack-comparison/asked.ts";
+import { MOST_TICKED } from "#app/lib/ticked-ids.ts";
 import { programsWhere } from "#app/policies/permissions.ts";
 import { scopeOf } from "#app/server/contexts.server.ts";
 import { withinPages } from "#app/server/list-page.server.ts";
@@ -37,6 +38,12 @@ export async function loader({ context, url }: Route.LoaderArgs) {
     mayEdit: programsWhere(scope.actor, "edit stacks and flows").length > 0,
   };
 }
+
+/** What may be done by whoever edits stacks; each asks once more. */
+const CHANGES = [
+  { label: "Duplicate", to: "/stacks/duplicate", most: MOST_TICKED },
+  { label: "Remove", to: "/stacks/remove", most: MOST_TICKED, removes: true },
+];
 
 export default function Stacks({ loaderData }: Route.ComponentProps) {
   const { page, flatWithin, programs, mayEdit } = loaderData;
@@ -68,7 +75,10 @@ export default function Stacks({ loaderData }: Route.ComponentProps) {
             ticks={ticks}
             what={["stack", "stacks"]}
             onPage={page.rows.map(({ id }) => id)}
-            actions={[{ label: "Compare", to: "/stacks/compare", least: 2, most: MOST_STACKS }]}
+            actions={[
+              { label: "Compare", to: "/stacks/compare", least: 2, most: MOST_STACKS },
+              ...(mayEdit ? CHANGES : []),
+            ]}
           />
           <DataTable
             caption="Stacks"
