@@ -46,6 +46,8 @@ export default [
     ...prefix("flows", [
       index("routes/_app/flows/list.tsx"),
       route("new", "routes/_app/flows/new.tsx"),
+      route("assess", "routes/_app/flows/assess.tsx"),
+      route("mark", "routes/_app/flows/mark.ts"),
       ...prefix("library", [
         route(":kind", "routes/_app/flows/library.tsx"),
         route("steps/new", "routes/_app/flows/new-step-template.tsx"),

@@ -52,6 +52,8 @@ const DOORS: Record<string, string> = {
   "/stacks/:stackId/sweep.svg": "302 404 200 200 200 200 404",
   "/stacks/:stackId/sweep/print": "302 404 200 200 200 200 404",
   "/flows": "302 403 200 200 200 200 403",
+  "/flows/assess": "302 403 403 200 200 403 403",
+  "/flows/mark": "302 302 302 302 302 302 302",
   "/flows/new": "302 403 403 200 200 403 403",
   "/flows/:flowId": "302 404 200 200 200 200 404",
   "/flows/:flowId/what-if": "302 404 403 200 200 403 404",

@@ -48,6 +48,9 @@ export function TickBar({ ticks, what, onPage, actions }: Props) {
           type="submit"
           formAction={to}
           formMethod={method}
+          // Without it a file of nothing that is ticked would be one of everything.
+          name={file ? "only" : undefined}
+          value={file ? "ticked" : undefined}
           data-file={file ? "" : undefined}
           className={removes ? "btn btn-remove" : "btn"}
           aria-describedby={`${ticks.form}-count`}

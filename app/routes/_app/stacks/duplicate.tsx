@@ -1,5 +1,5 @@
 import { SubmitButton } from "#app/components/forms/SubmitButton.tsx";
-import { TickedStacks } from "#app/components/stacks/TickedStacks.tsx";
+import { TickedPage } from "#app/components/ui/ticks/TickedPage.tsx";
 import { tickedIds, tickedVersions } from "#app/lib/ticked-ids.ts";
 import { scopeOf } from "#app/server/contexts.server.ts";
 import { postedForm } from "#app/server/form.server.ts";
@@ -18,7 +18,9 @@ export async function action({ request, context }: Route.ActionArgs) {
 
 export default function DuplicateStacks({ loaderData, actionData }: Route.ComponentProps) {
   return (
-    <TickedStacks
+    <TickedPage
+      what={["stack", "stacks"]}
+      list={{ name: "Stacks", path: "/stacks" }}
       title="Duplicate stacks"
       asked={loaderData}
       done={actionData}
@@ -26,6 +28,6 @@ export default function DuplicateStacks({ loaderData, actionData }: Route.Compon
       button={(number) => <SubmitButton busy="Copying">{`Duplicate ${number}`}</SubmitButton>}
     >
       Each copy stays in the program of its stack, as it is saved now, under the same name with a number behind it.
-    </TickedStacks>
+    </TickedPage>
   );
 }

@@ -1,4 +1,4 @@
-import { TickedStacks } from "#app/components/stacks/TickedStacks.tsx";
+import { TickedPage } from "#app/components/ui/ticks/TickedPage.tsx";
 import { tickedIds, tickedVersions } from "#app/lib/ticked-ids.ts";
 import { scopeOf } from "#app/server/contexts.server.ts";
 import { postedForm } from "#app/server/form.server.ts";
@@ -17,7 +17,9 @@ export async function action({ request, context }: Route.ActionArgs) {
 
 export default function RemoveStacks({ loaderData, actionData }: Route.ComponentProps) {
   return (
-    <TickedStacks
+    <TickedPage
+      what={["stack", "stacks"]}
+      list={{ name: "Stacks", path: "/stacks" }}
       title="Remove stacks"
       asked={loaderData}
       done={actionData}
@@ -29,6 +31,6 @@ export default function RemoveStacks({ loaderData, actionData }: Route.Component
       )}
     >
       There is no way back. Flows and assessments do not depend on these stacks and stay.
-    </TickedStacks>
+    </TickedPage>
   );
 }
