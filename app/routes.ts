@@ -36,6 +36,8 @@ export default [
     ...prefix("stacks", [
       index("routes/_app/stacks/list.tsx"),
       route("new", "routes/_app/stacks/new.tsx"),
+      route("duplicate", "routes/_app/stacks/duplicate.tsx"),
+      route("remove", "routes/_app/stacks/remove.tsx"),
       route("compare", "routes/_app/stacks/compare.tsx"),
       route("compare.csv", "routes/_app/stacks/compare-csv.ts"),
       route("compare.svg", "routes/_app/stacks/compare-svg.ts"),
@@ -48,6 +50,8 @@ export default [
     ...prefix("flows", [
       index("routes/_app/flows/list.tsx"),
       route("new", "routes/_app/flows/new.tsx"),
+      route("assess", "routes/_app/flows/assess.tsx"),
+      route("mark", "routes/_app/flows/mark.ts"),
       ...prefix("library", [
         route(":kind", "routes/_app/flows/library.tsx"),
         route("steps/new", "routes/_app/flows/new-step-template.tsx"),
