@@ -4,6 +4,8 @@ import { bowUncertainty } from "#app/engine/stack/warp-uncertainty.ts";
 import { reachedWaferShape, type ReachedWaferShape } from "#app/engine/plate/free-wafer-shape.ts";
 import type { ShapeRegime } from "#app/engine/vocabulary.ts";
 import type { ComparedInputs } from "#app/schemas/stack-comparison.ts";
+import type { LetteredCurve } from "../comparison/crossing-words.ts";
+import { remembered } from "../comparison/crossings.ts";
 import { HALF_TURN } from "../stack-chart.ts";
 import { stackOf } from "../stack-of-request.ts";
 import type { Estimated } from "../stack-words.ts";
@@ -74,4 +76,11 @@ export function shareOfHalfTurn(
 ): number {
   const halfTurn = (HALF_TURN * diameter) / 2;
   return Math.max(warp / halfTurn, rollRadius === null ? 0 : (CLOSING * halfTurn) / rollRadius);
+}
+
+/** The warp of each stack that can be estimated as a function of its silicon thickness. */
+export function stackCurves(stacks: readonly ComparedStack[]): LetteredCurve[] {
+  return stacks.flatMap(({ letter, figures }) =>
+    figures ? [{ letter, curve: remembered((thickness) => warpAt(figures.stack, thickness)) }] : [],
+  );
 }

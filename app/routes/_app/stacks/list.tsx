@@ -1,14 +1,15 @@
 import { Link } from "react-router";
 import { PageHead } from "#app/components/layout/PageHead.tsx";
-import { CompareTicked } from "#app/components/stacks/compare/CompareTicked.tsx";
-import { tickColumn } from "#app/components/stacks/compare/tick-column.tsx";
-import { useTicked } from "#app/components/stacks/compare/use-ticked.ts";
+import { CompareTicked } from "#app/components/comparison/CompareTicked.tsx";
+import { tickColumn } from "#app/components/comparison/tick-column.tsx";
+import { useTicked } from "#app/components/comparison/use-ticked.ts";
 import { exaggerationOf } from "#app/components/stacks/bow-of.ts";
 import { stackColumns } from "#app/components/stacks/stack-columns.tsx";
 import { DataTable } from "#app/components/ui/DataTable.tsx";
 import { EmptyState } from "#app/components/ui/EmptyState.tsx";
 import { FAVOURITES_ONLY } from "#app/components/kept/favourites-only.ts";
 import { ListHead } from "#app/components/ui/ListHead.tsx";
+import { STACKS } from "#app/lib/comparison/kinds.ts";
 import { readListParams } from "#app/lib/list-params.ts";
 import { programsWhere } from "#app/policies/permissions.ts";
 import { scopeOf } from "#app/server/contexts.server.ts";
@@ -63,7 +64,7 @@ export default function Stacks({ loaderData }: Route.ComponentProps) {
       />
       {page.rows.length > 0 ? (
         <>
-          <CompareTicked ticked={ticked} onPage={page.rows.map(({ id }) => id)} onClear={clear} />
+          <CompareTicked kind={STACKS} ticked={ticked} onPage={page.rows.map(({ id }) => id)} onClear={clear} />
           <DataTable
             caption="Stacks"
             columns={[tickColumn(ticked, read), ...stackColumns(exaggerationOf(wafers), flatWithin)]}

@@ -1,12 +1,13 @@
 import { PrintPlot } from "#app/components/drawings/PrintPlot.tsx";
+import type { Plot } from "#app/components/drawings/plot.ts";
+import type { ComparedMember } from "#app/schemas/comparison.ts";
 import { PlotKey } from "./PlotKey.tsx";
-import type { ComparedView, ComparisonView } from "#app/schemas/stack-comparison.ts";
-import { comparisonPlot } from "./comparison-plot.ts";
-import { chartName } from "./chart-words.ts";
 
 interface Props {
-  stacks: ComparisonView["stacks"];
-  compared: ComparedView;
+  /** what the chart shows */
+  name: string;
+  plot: Plot;
+  members: readonly ComparedMember[];
 }
 
 const WIDTH = 800;
@@ -14,11 +15,9 @@ const PLOT = 480;
 const HEAD = 34;
 const ROW = 20;
 
-/** The chart as a drawing that stands by itself: what it shows above it, the whole names of the stacks below. */
-export function ComparisonFile({ stacks, compared }: Props) {
-  const plot = comparisonPlot(compared.chart);
-  const name = chartName(compared.temperature);
-  const height = HEAD + PLOT + ROW * (stacks.length + 1);
+/** The chart as a drawing that stands by itself: what it shows above it, the whole names of its lines below. */
+export function ComparisonFile({ name, plot, members }: Props) {
+  const height = HEAD + PLOT + ROW * (members.length + 1);
   return (
     <svg
       xmlns="http://www.w3.org/2000/svg"
@@ -36,10 +35,10 @@ export function ComparisonFile({ stacks, compared }: Props) {
       <svg y={HEAD} width={WIDTH} height={PLOT}>
         <PrintPlot plot={plot} label={name} width={WIDTH} height={PLOT} />
       </svg>
-      {stacks.map(({ letter, name: stack, program }, n) => (
+      {members.map(({ letter, name: member, program }, n) => (
         <g key={letter} transform={`translate(12 ${HEAD + PLOT + ROW * (n + 1)})`}>
           <PlotKey plot={plot} letter={letter} />
-          <text x="52" y="4">{`${letter}  ${stack} (${program})`}</text>
+          <text x="52" y="4">{`${letter}  ${member} (${program})`}</text>
         </g>
       ))}
     </svg>

@@ -1,11 +1,11 @@
 import { noBreak } from "#app/components/drawings/no-break.ts";
-import type { StackSensitivity } from "#app/schemas/stack-comparison.ts";
+import type { ComparedSensitivity } from "#app/schemas/comparison.ts";
 
-/** The inputs of each stack that move its warp most, as bars with words. */
-export function Sensitivities({ stacks }: { stacks: readonly StackSensitivity[] }) {
+/** The inputs of each that move its warp most, as bars with words. */
+export function Sensitivities({ of }: { of: readonly ComparedSensitivity[] }) {
   return (
     <div className="mt-2 grid gap-x-8 gap-y-4 tablet:grid-cols-2 wide:grid-cols-3">
-      {stacks.map(({ letter, name, remark, lines }) => (
+      {of.map(({ letter, name, remark, lines }) => (
         <section key={letter} aria-label={`${letter} ${name}`} className="keep-whole">
           <h3>
             <b>{letter}</b> {name}

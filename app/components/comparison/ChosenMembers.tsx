@@ -1,29 +1,31 @@
 import { Link } from "react-router";
-import { comparisonSearch, moved, type ComparisonAsked } from "#app/lib/stack-comparison/asked.ts";
-import type { ComparisonChart, ComparisonView } from "#app/schemas/stack-comparison.ts";
-import { comparisonPlot } from "./comparison-plot.ts";
+import { comparisonSearch, moved, type ComparisonAsked } from "#app/lib/comparison/asked.ts";
+import type { ComparedKind } from "#app/lib/comparison/kinds.ts";
+import type { Plot } from "#app/components/drawings/plot.ts";
+import type { ComparedMember } from "#app/schemas/comparison.ts";
 import { PlotKey } from "./PlotKey.tsx";
 
 interface Props {
+  kind: ComparedKind;
   asked: ComparisonAsked;
-  stacks: ComparisonView["stacks"];
-  chart: ComparisonChart | null;
+  members: readonly ComparedMember[];
+  /** null while nothing is compared */
+  plot: Plot | null;
 }
 
-/** The stacks that are compared, in the order of their columns: each may be moved and taken out. */
-export function ChosenStacks({ asked, stacks, chart }: Props) {
-  const plot = chart && comparisonPlot(chart);
+/** What is compared, in the order of their columns: each may be moved and taken out. */
+export function ChosenMembers({ kind, asked, members, plot }: Props) {
   const { ids } = asked;
   return (
     <section aria-labelledby="chosen" className="min-w-0 p-4 tablet:px-6">
       <h2 id="chosen" className="font-semibold">
         Compared
       </h2>
-      {stacks.length === 0 ? (
-        <p className="mt-1 text-quiet">No stack is chosen.</p>
+      {members.length === 0 ? (
+        <p className="mt-1 text-quiet">No {kind.one} is chosen.</p>
       ) : (
         <ol className="mt-1 divide-y divide-line">
-          {stacks.map(({ id, letter, name, program }, n) => (
+          {members.map(({ id, letter, name, program }, n) => (
             <li key={id} className="flex flex-wrap items-center gap-x-3 gap-y-1 py-1">
               <b className="w-4">{letter}</b>
               {plot ? (
@@ -32,7 +34,7 @@ export function ChosenStacks({ asked, stacks, chart }: Props) {
                 </svg>
               ) : null}
               <span className="min-w-0 flex-1 basis-48">
-                <Link to={`/stacks/${id}`} className="link">
+                <Link to={`${kind.path}/${id}`} className="link">
                   {name}
                 </Link>{" "}
                 <span className="text-quiet">{program}</span>
@@ -40,7 +42,7 @@ export function ChosenStacks({ asked, stacks, chart }: Props) {
               <span className="screen-only flex gap-x-4">
                 <Move to={n > 0 ? comparisonSearch(asked, { ids: moved(ids, id, -1) }) : null} name={name} earlier />
                 <Move
-                  to={n < stacks.length - 1 ? comparisonSearch(asked, { ids: moved(ids, id, 1) }) : null}
+                  to={n < members.length - 1 ? comparisonSearch(asked, { ids: moved(ids, id, 1) }) : null}
                   name={name}
                 />
                 <Link

@@ -2,7 +2,7 @@ import { colour } from "#app/components/drawings/colour.ts";
 import { PLOT_DASHES, type Plot } from "#app/components/drawings/plot.ts";
 import { PlotMarker } from "#app/components/drawings/PlotMarker.tsx";
 
-/** Line and marker of a stack, 40 px long about y = 0; nothing for one that has no curve. */
+/** Line and marker of a member, 40 px long about y = 0; nothing for one that has no curve. */
 export function PlotKey({ plot, letter }: { plot: Plot; letter: string }) {
   const series = plot.series.find(({ id }) => id === letter);
   if (!series) return null;

@@ -1,19 +1,18 @@
 import { solveFor } from "#app/engine/inverse/solve-for.ts";
-import type { StackInput } from "#app/engine/stack/model.ts";
 import { LEAST_DRAWN } from "../stack-chart.ts";
-import { warpAt } from "./figures.ts";
 
-/** A thickness at which two stacks warp alike, m. */
+/** A thickness at which two wafers warp alike, m. */
 export interface Crossing {
   thickness: number;
   warp: number;
 }
 
 /**
- * How the warps of two stacks lie to each other over a range of thickness, as far as neither is rolled past half a turn, where a warp
- * means nothing: from `from` on (m). `thinner` warps more at that end.
+ * How two warps lie to each other over a range of thickness, as far as neither is rolled past half a turn, where a warp
+ * means nothing: from `from` on (m). `thinner` warps more at that end. `no range`: they have no thickness in common.
  */
 export type PairOfWarps =
+  | { kind: "no range" }
   | { kind: "rolled up" }
   | { kind: "the same"; from: number }
   | { kind: "apart"; from: number; thinner: "first" | "second" }
@@ -31,24 +30,25 @@ const HALVINGS = 30;
 /** Share of the warp below which a difference is none. */
 const ALIKE = 1e-7;
 
-/** The warp of a stack as a function of its thickness, which remembers: every pair asks at the same places. */
-export function warpCurve(stack: StackInput): (thickness: number) => { warp: number; rolledUp: boolean } {
-  const known = new Map<number, { warp: number; rolledUp: boolean }>();
+/** A warp as a function of silicon thickness, m. */
+export type WarpCurve = (thickness: number) => { warp: number; rolledUp: boolean };
+
+/** The same curve, which remembers: every pair asks at the same places. */
+export function remembered(curve: WarpCurve): WarpCurve {
+  const known = new Map<number, ReturnType<WarpCurve>>();
   return (thickness) => {
-    const found = known.get(thickness) ?? warpAt(stack, thickness);
+    const found = known.get(thickness) ?? curve(thickness);
     known.set(thickness, found);
     return found;
   };
 }
 
-type Curve = ReturnType<typeof warpCurve>;
-
 /**
- * Where two stacks warp alike, thinnest first: the root of the difference of their full models, to the last digit. Not counted are
+ * Where two warps are alike, thinnest first: the root of the difference of their full models, to the last digit. Not counted are
  * places where one of them snaps past the other, so that both are never alike, and where both are as good as flat.
  * @throws EngineInputError when the range is empty
  */
-export function warpCrossings(first: Curve, second: Curve, range: Range): PairOfWarps {
+export function warpCrossings(first: WarpCurve, second: WarpCurve, range: Range): PairOfWarps {
   const from = meaningfulFrom((thickness) => first(thickness).rolledUp || second(thickness).rolledUp, range);
   if (from === null) return { kind: "rolled up" };
   const difference = (thickness: number) => first(thickness).warp - second(thickness).warp;

@@ -1,4 +1,4 @@
-import type { ComparedGroup, ComparedRow, ComparedView } from "#app/schemas/stack-comparison.ts";
+import type { ComparedGroup, ComparedRow, ComparedWords } from "#app/schemas/comparison.ts";
 import { FILING_MARGIN, MARGIN, PAPERS, type Paper } from "../paper-size.ts";
 
 /** Width of the heads of rows, mm. */
@@ -13,20 +13,20 @@ const AROUND = 84;
 export const PLOT_HEIGHT = 74;
 /** As many sentences on crossings as one page takes. */
 const MOST_CROSSINGS = 6;
-/** The groups of figures, which come first. */
-const FIGURE_GROUPS = 3;
-
 const linesIn = (text: string, width: number) => Math.max(1, Math.ceil((text.length * LETTER) / width));
 
-/** What of a comparison one page holds: all figures first, then the inputs that differ, until it is full. */
+/**
+ * What of a comparison one page holds: all figures first, then what differs of the rest, until it is full.
+ * @param members how many are compared
+ * @param figureGroups how many groups, which come first, are figures
+ */
 export function paperRows(
-  { groups: all, crossings, sensitivities }: Pick<ComparedView, "groups" | "crossings" | "sensitivities">,
-  stacks: number,
-  paper: Paper,
-): { groups: ComparedGroup[]; crossings: ComparedView["crossings"]; moreRows: number; moreCrossings: number } {
+  { groups: all, crossings, sensitivities }: Pick<ComparedWords, "groups" | "crossings" | "sensitivities">,
+  { members, figureGroups, paper }: { members: number; figureGroups: number; paper: Paper },
+): { groups: ComparedGroup[]; crossings: ComparedWords["crossings"]; moreRows: number; moreCrossings: number } {
   const { width, height } = PAPERS[paper];
   const frame = width - FILING_MARGIN - MARGIN;
-  const column = (frame - HEAD_COLUMN) / stacks - 2;
+  const column = (frame - HEAD_COLUMN) / members - 2;
   const crossing = crossings.filter(({ numbers }) => numbers.length > 0);
   const shown = (crossings.length > MOST_CROSSINGS ? crossing : crossings).slice(0, MOST_CROSSINGS);
   const sentences = shown.reduce((sum, { sentence }) => sum + linesIn(sentence, frame - 6) * LINE, 0);
@@ -34,8 +34,8 @@ export function paperRows(
     Math.max(linesIn(label, HEAD_COLUMN - 2), ...cells.map(({ text }) => linesIn(text, column))) * LINE + PADDING;
   let left = height - 2 * MARGIN - PLOT_HEIGHT - AROUND - sentences;
   let moreRows = 0;
-  const figures = [...all.slice(0, FIGURE_GROUPS), moverGroup(sensitivities)];
-  const groups = [...figures, ...all.slice(FIGURE_GROUPS)];
+  const figures = [...all.slice(0, figureGroups), moverGroup(sensitivities)];
+  const groups = [...figures, ...all.slice(figureGroups)];
   const kept = groups.map((group, n) => {
     const wanted = n < figures.length ? group.rows : group.rows.filter(({ differs }) => differs);
     const rows: ComparedRow[] = [];
@@ -59,8 +59,8 @@ export function paperRows(
 
 const MOVERS = ["Most", "Next"];
 
-/** The two inputs of each stack that move its warp most, as rows: the screen has five, with bars. */
-function moverGroup(sensitivities: ComparedView["sensitivities"]): ComparedGroup {
+/** The two inputs of each that move its warp most, as rows: the screen has five, with bars. */
+function moverGroup(sensitivities: ComparedWords["sensitivities"]): ComparedGroup {
   return {
     key: "movers",
     title: "What moves the warp most, by its tolerance",

@@ -1,10 +1,10 @@
 import { noBreak } from "#app/components/drawings/no-break.ts";
-import type { CrossingWords } from "#app/schemas/stack-comparison.ts";
+import type { CrossingWords } from "#app/schemas/comparison.ts";
 
 /** More pairs that do not cross than this are folded away. */
 const IN_SIGHT = 3;
 
-/** Every two of the stacks in words: where they warp alike first, then those that nowhere do. */
+/** Every two of those compared in words: where they warp alike first, then those that nowhere do. */
 export function Crossings({ crossings }: { crossings: readonly CrossingWords[] }) {
   const crossing = crossings.filter(({ numbers }) => numbers.length > 0);
   const others = crossings.filter(({ numbers }) => numbers.length === 0);

@@ -1,7 +1,7 @@
 import type { Column } from "#app/components/ui/DataTable.tsx";
 import { TICK_FORM } from "./CompareTicked.tsx";
 
-/** Boxes to tick stacks that are to be compared. The form that they belong to stands above the list. */
+/** Boxes to tick what is to be compared. The form that they belong to stands above the list. */
 export function tickColumn<Row extends { id: string; name: string }>(
   ticked: ReadonlySet<string>,
   onTick: (form: HTMLFormElement | null) => void,

@@ -1,14 +1,16 @@
 import { useState } from "react";
 import { Form, Link } from "react-router";
-import { comparisonSearch, LEAST_STACKS, MOST_STACKS, type ComparisonAsked } from "#app/lib/stack-comparison/asked.ts";
+import { comparisonSearch, LEAST_COMPARED, MOST_COMPARED, type ComparisonAsked } from "#app/lib/comparison/asked.ts";
+import type { ComparedKind } from "#app/lib/comparison/kinds.ts";
 import { count } from "#app/lib/count-words.ts";
 import { TextField } from "#app/components/ui/TextField.tsx";
-import type { StackChoice } from "#app/schemas/stack-comparison.ts";
+import type { ComparisonChoice } from "#app/schemas/comparison.ts";
 import { HiddenAsked } from "./HiddenAsked.tsx";
 
 interface Props {
+  kind: ComparedKind;
   asked: ComparisonAsked;
-  choices: readonly StackChoice[];
+  choices: readonly ComparisonChoice[];
   /** how many are chosen already */
   chosen: number;
 }
@@ -16,29 +18,29 @@ interface Props {
 /** As many as are in sight at once. */
 const SHOWN = 6;
 
-/** Stacks that may be added, unfolded while there is nothing to compare yet. */
-export function AddStack({ asked, choices, chosen }: Props) {
+/** What may be added, unfolded while there is nothing to compare yet. */
+export function AddToComparison({ kind, asked, choices, chosen }: Props) {
   return (
     <details
       className="screen-only border-t border-line px-4 py-3 tablet:px-6"
-      open={chosen < LEAST_STACKS || asked.query !== ""}
+      open={chosen < LEAST_COMPARED || asked.query !== ""}
     >
       <summary className="w-fit cursor-pointer">
-        <h2 className="link inline font-semibold">Add a stack</h2>
+        <h2 className="link inline font-semibold">Add a {kind.one}</h2>
       </summary>
-      {chosen >= MOST_STACKS ? (
+      {chosen >= MOST_COMPARED ? (
         <p className="mt-1 text-quiet">
-          A comparison holds {count(MOST_STACKS)} stacks at most. Remove one to add another.
+          A comparison holds {count(MOST_COMPARED)} {kind.many} at most. Remove one to add another.
         </p>
       ) : (
-        <Choices asked={asked} choices={choices} />
+        <Choices kind={kind} asked={asked} choices={choices} />
       )}
     </details>
   );
 }
 
 /** Searched while it is typed, by the server where there are no scripts. */
-function Choices({ asked, choices }: Omit<Props, "chosen">) {
+function Choices({ kind, asked, choices }: Omit<Props, "chosen">) {
   const [typed, setTyped] = useState(asked.query);
   const words = typed.toLowerCase().split(/\s+/).filter(Boolean);
   const found = choices.filter(({ name, program }) =>
@@ -54,7 +56,7 @@ function Choices({ asked, choices }: Omit<Props, "chosen">) {
           label="Name or program contains"
           className="min-w-0 flex-1"
           defaultValue={asked.query}
-          hint={foundWords(found.length, choices.length)}
+          hint={foundWords(kind, found.length, choices.length)}
           onInput={(event) => setTyped(event.currentTarget.value)}
         />
         <button type="submit" className="btn mt-5">
@@ -82,8 +84,8 @@ function Choices({ asked, choices }: Omit<Props, "chosen">) {
   );
 }
 
-function foundWords(found: number, all: number): string {
-  if (all === 0) return "There is no other stack";
-  if (found === 0) return "No stack fits: change the search";
+function foundWords(kind: ComparedKind, found: number, all: number): string {
+  if (all === 0) return `There is no other ${kind.one}`;
+  if (found === 0) return `No ${kind.one} fits: change the search`;
   return found > SHOWN ? `${found} fit, the ${count(SHOWN)} newest are shown` : `${found} of ${all}, newest first`;
 }

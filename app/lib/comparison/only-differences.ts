@@ -1,4 +1,4 @@
-import type { ComparedGroup } from "#app/schemas/stack-comparison.ts";
+import type { ComparedGroup } from "#app/schemas/comparison.ts";
 
 /** Only the rows that differ; groups of which nothing is left go. */
 export function onlyDifferences(groups: readonly ComparedGroup[]): ComparedGroup[] {

@@ -1,19 +1,23 @@
 import { Link } from "react-router";
 import { noBreak } from "#app/components/drawings/no-break.ts";
-import { comparisonSearch, type ComparisonAsked } from "#app/lib/stack-comparison/asked.ts";
-import { onlyDifferences } from "#app/lib/stack-comparison/only-differences.ts";
-import type { ComparedCell, ComparedGroup, ComparisonView } from "#app/schemas/stack-comparison.ts";
+import { comparisonSearch, type ComparisonAsked } from "#app/lib/comparison/asked.ts";
+import { onlyDifferences } from "#app/lib/comparison/only-differences.ts";
+import type { ComparedCell, ComparedGroup, ComparedMember } from "#app/schemas/comparison.ts";
 
 interface Props {
   asked: ComparisonAsked;
-  stacks: ComparisonView["stacks"];
+  members: readonly ComparedMember[];
   groups: readonly ComparedGroup[];
+  /** what its rows are, for those who do not see it */
+  caption: string;
+  /** how its marks are to be read, besides the bar */
+  note: string;
 }
 
 const STICKY = "sticky left-0 bg-raised";
 
-/** Figures and inputs as rows, stacks as columns; what is not as in the first is marked with a bar and in bold. */
-export function DifferenceTable({ asked, stacks, groups }: Props) {
+/** Figures and inputs as rows, members as columns; what is not as in the first is marked with a bar and in bold. */
+export function DifferenceTable({ asked, members, groups, caption, note }: Props) {
   const shown = asked.only ? onlyDifferences(groups) : groups;
   const differing = groups.flatMap(({ rows }) => rows).filter(({ differs }) => differs).length;
   const all = groups.flatMap(({ rows }) => rows).length;
@@ -39,21 +43,20 @@ export function DifferenceTable({ asked, stacks, groups }: Props) {
         </nav>
       </div>
       <p className="text-quiet">
-        Bold behind a bar: not as in {stacks[0]?.letter ?? "the first"}. ± of a bow or warp is its expanded uncertainty,
-        k&nbsp;=&nbsp;2; ± of an input is its tolerance.
+        Bold behind a bar: not as in {members[0]?.letter ?? "the first"}. {noBreak(note)}
       </p>
       {shown.length === 0 ? (
         <p className="mt-2">Nothing differs: they are the same in all {all} rows.</p>
       ) : (
         <div className="relative mt-2 overflow-x-auto" tabIndex={0} role="region" aria-label="Differences, row by row">
           <table className="table">
-            <caption className="sr-only">Figures and inputs of the stacks, side by side</caption>
+            <caption className="sr-only">{caption}</caption>
             <thead>
               <tr>
                 <th scope="col" className={`${STICKY} min-w-32`}>
                   What
                 </th>
-                {stacks.map(({ id, letter, name }) => (
+                {members.map(({ id, letter, name }) => (
                   <th key={id} scope="col" className="min-w-40">
                     <b className="text-ink">{letter}</b> {name}
                   </th>
@@ -63,7 +66,7 @@ export function DifferenceTable({ asked, stacks, groups }: Props) {
             {shown.map(({ key, title, rows }) => (
               <tbody key={key}>
                 <tr>
-                  <th scope="rowgroup" colSpan={stacks.length + 1} className="bg-wash!">
+                  <th scope="rowgroup" colSpan={members.length + 1} className="bg-wash!">
                     <span className="sticky left-2 font-semibold">{noBreak(title)}</span>
                   </th>
                 </tr>
@@ -74,7 +77,7 @@ export function DifferenceTable({ asked, stacks, groups }: Props) {
                       {row.differs ? <span className="block text-label font-semibold">differs</span> : null}
                     </th>
                     {row.cells.map((cell, column) => (
-                      <Cell key={stacks[column]?.id ?? column} cell={cell} />
+                      <Cell key={members[column]?.id ?? column} cell={cell} />
                     ))}
                   </tr>
                 ))}

@@ -1,22 +1,24 @@
 import { noBreak } from "#app/components/drawings/no-break.ts";
-import { HEAD_COLUMN } from "#app/lib/stack-comparison/paper-rows.ts";
-import type { ComparedGroup, ComparisonView } from "#app/schemas/stack-comparison.ts";
+import { HEAD_COLUMN } from "#app/lib/comparison/paper-rows.ts";
+import type { ComparedGroup, ComparedMember } from "#app/schemas/comparison.ts";
 
 interface Props {
-  stacks: ComparisonView["stacks"];
+  members: readonly ComparedMember[];
   groups: readonly ComparedGroup[];
+  /** what its rows are, for those who do not see it */
+  caption: string;
 }
 
 const EDGE = "border-t-[0.2mm] border-line px-[1mm] py-[0.4mm] align-top";
 
 /** The rows of a comparison on paper: letters as heads, notes left out. */
-export function PaperTable({ stacks, groups }: Props) {
+export function PaperTable({ members, groups, caption }: Props) {
   return (
     <table className="w-full table-fixed border-collapse text-left text-[8pt]/[3.6mm]">
-      <caption className="sr-only">Figures and inputs of the stacks, side by side</caption>
+      <caption className="sr-only">{caption}</caption>
       <colgroup>
         <col style={{ width: `${HEAD_COLUMN}mm` }} />
-        {stacks.map(({ id }) => (
+        {members.map(({ id }) => (
           <col key={id} />
         ))}
       </colgroup>
@@ -25,7 +27,7 @@ export function PaperTable({ stacks, groups }: Props) {
           <th scope="col" className="px-[1mm] pl-[3mm] font-normal">
             What
           </th>
-          {stacks.map(({ id, letter }) => (
+          {members.map(({ id, letter }) => (
             <th key={id} scope="col" className="px-[1mm] font-semibold">
               {letter}
             </th>
@@ -37,7 +39,7 @@ export function PaperTable({ stacks, groups }: Props) {
           <tr>
             <th
               scope="rowgroup"
-              colSpan={stacks.length + 1}
+              colSpan={members.length + 1}
               className="border-t-[0.25mm] border-ink bg-wash px-[3mm] py-[0.4mm] font-semibold"
             >
               {noBreak(title)}
@@ -49,7 +51,7 @@ export function PaperTable({ stacks, groups }: Props) {
                 {noBreak(label)}
               </th>
               {cells.map(({ text, differs }, column) => (
-                <td key={stacks[column]?.id ?? column} className={`${EDGE} ${differs ? "font-semibold" : ""}`}>
+                <td key={members[column]?.id ?? column} className={`${EDGE} ${differs ? "font-semibold" : ""}`}>
                   {noBreak(text)}
                 </td>
               ))}

@@ -1,29 +1,35 @@
-/** Fewest and most stacks of one comparison: with more, neither lines nor columns can be told apart. */
-export const LEAST_STACKS = 2;
-export const MOST_STACKS = 6;
+/** Fewest and most of one comparison: with more, neither lines nor columns can be told apart. */
+export const LEAST_COMPARED = 2;
+export const MOST_COMPARED = 6;
 /** In the place of a tool: no limit of one is drawn. */
 export const NO_TOOL = "none";
 /** What an address may hold before the rest is left unread. */
 const MOST_READ = 40;
 const LONGEST = 60;
 
-/** Which stacks are compared, and how: all of it in the address, so that every comparison can be linked. */
+/** Which stacks or flows are compared, and how: all of it in the address, so that every comparison can be linked. */
 export interface ComparisonAsked {
   /** in the order of their columns */
   ids: string[];
-  /** temperature as it was typed, blank for 25 °C */
+  /** of stacks: temperature as it was typed, blank for 25 °C */
   at: string;
-  scale: "log" | "linear";
-  /** thickness range as it was typed, blank for 20 µm to the thickest wafer as bought */
+  /** of flows: what their warp is drawn along, blank for silicon thickness where two or more of them are thinned */
+  along: "" | "thickness" | "steps";
+  /** blank for what suits the chart */
+  scale: "" | "log" | "linear";
+  /** thickness range as it was typed, blank for all of it */
   from: string;
   to: string;
-  /** id of the tool whose limits are drawn, 'none', or blank for the strictest and the most lenient */
+  /** id of the tool whose limits are drawn, 'none', or blank for the usual ones */
   tool: string;
   /** only rows that differ */
   only: boolean;
   /** what is searched for to be added */
   query: string;
 }
+
+const oneOf = <Word extends string>(words: readonly Word[], typed: string | null) =>
+  words.find((word) => word === typed) ?? "";
 
 /** Reads a comparison from its address. Ids come as one list with commas, or one by one as a form sends them. */
 export function readComparison(search: URLSearchParams): ComparisonAsked {
@@ -33,7 +39,8 @@ export function readComparison(search: URLSearchParams): ComparisonAsked {
   return {
     ids: [...new Set(named)].slice(0, MOST_READ),
     at: text("at"),
-    scale: search.get("scale") === "linear" ? "linear" : "log",
+    along: oneOf(["thickness", "steps"], search.get("along")),
+    scale: oneOf(["log", "linear"], search.get("scale")),
     from: text("from"),
     to: text("to"),
     tool: text("tool"),
@@ -42,20 +49,16 @@ export function readComparison(search: URLSearchParams): ComparisonAsked {
   };
 }
 
+/** The fields of a comparison besides its members, as address and forms have them; blank ones are left out. */
+export function comparisonFields({ ids: _, only, query, ...fields }: ComparisonAsked): [name: string, value: string][] {
+  return Object.entries({ ...fields, only: only ? "differences" : "", q: query }).filter(([, value]) => value !== "");
+}
+
 /** The search part of a comparison's address, without what is as it is by itself. */
 export function comparisonSearch(asked: ComparisonAsked, changes: Partial<ComparisonAsked> = {}): string {
-  const { ids, at, scale, from, to, tool, only, query } = { ...asked, ...changes };
-  const others = Object.entries({
-    at,
-    scale: scale === "log" ? "" : scale,
-    from,
-    to,
-    tool,
-    only: only ? "differences" : "",
-    q: query,
-  }).filter(([, value]) => value !== "");
-  const rest = new URLSearchParams(others).toString();
-  return `?of=${ids.map(encodeURIComponent).join(",")}${rest === "" ? "" : `&${rest}`}`;
+  const changed = { ...asked, ...changes };
+  const rest = new URLSearchParams(comparisonFields(changed)).toString();
+  return `?of=${changed.ids.map(encodeURIComponent).join(",")}${rest === "" ? "" : `&${rest}`}`;
 }
 
 /** The list with one of its members a place earlier or later. */
