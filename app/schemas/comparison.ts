@@ -40,6 +40,8 @@ export interface ComparedCurve {
   onset: Place | null;
   /** stretches of thickness over which it is curled about one axis, m */
   curled: { from: number; to: number }[];
+  /** stretches over which it has no value and no line, m */
+  gaps?: { from: number; to: number }[];
 }
 
 interface LimitLine {

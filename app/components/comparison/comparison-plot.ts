@@ -43,6 +43,7 @@ export function comparisonPlot(chart: ComparisonChart): Plot {
       marker,
       colourToken,
       points: curve.points,
+      gaps: curve.gaps,
       markersAt: markers(chart, place),
     })),
     xLimits: thicknessLimits,

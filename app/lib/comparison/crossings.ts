@@ -34,8 +34,10 @@ const ALIKE = 1e-7;
 export type WarpCurve = (thickness: number) => { warp: number; rolledUp: boolean };
 
 /** The same curve, which remembers: every pair asks at the same places. */
-export function remembered(curve: WarpCurve): WarpCurve {
-  const known = new Map<number, ReturnType<WarpCurve>>();
+export function remembered<Warp extends ReturnType<WarpCurve>>(
+  curve: (thickness: number) => Warp,
+): (thickness: number) => Warp {
+  const known = new Map<number, Warp>();
   return (thickness) => {
     const found = known.get(thickness) ?? curve(thickness);
     known.set(thickness, found);
