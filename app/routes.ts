@@ -14,6 +14,7 @@ export default [
   layout("routes/_print/layout.tsx", [
     route("sheets/:assessmentId", "routes/_print/sheet.tsx"),
     route("assessments/change-request/print", "routes/_print/change-request.tsx"),
+    route("flows/compare/print", "routes/_print/flow-comparison.tsx"),
     route("stacks/compare/print", "routes/_print/comparison.tsx"),
     route("stacks/:stackId/sweep/print", "routes/_print/sweep.tsx"),
   ]),
@@ -44,6 +45,9 @@ export default [
     ...prefix("flows", [
       index("routes/_app/flows/list.tsx"),
       route("new", "routes/_app/flows/new.tsx"),
+      route("compare", "routes/_app/flows/compare.tsx"),
+      route("compare.csv", "routes/_app/flows/compare-csv.ts"),
+      route("compare.svg", "routes/_app/flows/compare-svg.ts"),
       ...prefix("library", [
         route(":kind", "routes/_app/flows/library.tsx"),
         route("steps/new", "routes/_app/flows/new-step-template.tsx"),

@@ -13,6 +13,8 @@ export interface FlowFigures {
   deciding: DecidingWarp | null;
   /** inputs by how far they move the deciding warp */
   movers: FlowMover[];
+  /** films put down, in the order of the steps; of those that came with the wafer too; thickness in m */
+  films: { name: string; thickness: number }[];
 }
 
 /** A flow that is compared, with the letter that stands for it. */
@@ -43,6 +45,9 @@ export function flowFigures(flow: FlowInput, result: AssessmentResult): FlowFigu
     result,
     thinning: thinningOf(leg),
     deciding,
+    films: leg.steps.flatMap(({ adds }) =>
+      adds.map(({ film: { name }, thickness }) => ({ name, thickness: thickness.value })),
+    ),
     movers: deciding ? flowMovers(leg, { step: deciding.step.number, moment: deciding.moment }) : [],
   };
 }

@@ -1,10 +1,14 @@
 import { Link } from "react-router";
 import { FindingTag } from "#app/components/drawings/FindingTag.tsx";
 import { PageHead } from "#app/components/layout/PageHead.tsx";
+import { CompareTicked } from "#app/components/comparison/CompareTicked.tsx";
+import { tickColumn } from "#app/components/comparison/tick-column.tsx";
+import { useTicked } from "#app/components/comparison/use-ticked.ts";
 import { DataTable, type Column } from "#app/components/ui/DataTable.tsx";
 import { EmptyState } from "#app/components/ui/EmptyState.tsx";
 import { FAVOURITES_ONLY } from "#app/components/kept/favourites-only.ts";
 import { ListHead } from "#app/components/ui/ListHead.tsx";
+import { FLOWS } from "#app/lib/comparison/kinds.ts";
 import { formatBare } from "#app/lib/format-measured.ts";
 import { revisionLetters } from "#app/lib/assessment-revision.ts";
 import { readListParams } from "#app/lib/list-params.ts";
@@ -76,6 +80,7 @@ const columns: Column<Row>[] = [
 
 export default function Flows({ loaderData }: Route.ComponentProps) {
   const { page, programs, mayEdit } = loaderData;
+  const { ticked, read, clear } = useTicked();
   const searched = page.params.query !== "" || Object.values(page.params.filters).some(Boolean);
   const add = mayEdit && (
     <Link to="/flows/new" className="btn btn-primary">
@@ -110,7 +115,15 @@ export default function Flows({ loaderData }: Route.ComponentProps) {
         ]}
       />
       {page.rows.length > 0 ? (
-        <DataTable caption="Flows" columns={columns} page={page} rowKey={({ id }) => id} />
+        <>
+          <CompareTicked kind={FLOWS} ticked={ticked} onPage={page.rows.map(({ id }) => id)} onClear={clear} />
+          <DataTable
+            caption="Flows"
+            columns={[tickColumn(ticked, read), ...columns]}
+            page={page}
+            rowKey={({ id }) => id}
+          />
+        </>
       ) : (
         <EmptyState title={searched ? "No flow fits" : "No flows yet"} actions={!searched && add}>
           {searched
