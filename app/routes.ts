@@ -18,6 +18,7 @@ export default [
     route("sheets/:assessmentId", "routes/_print/sheet.tsx"),
     route("sheets/:assessmentId/draft.pdf", "routes/_print/draft-pdf.ts"),
     route("assessments/change-request/print", "routes/_print/change-request.tsx"),
+    route("flows/compare/print", "routes/_print/flow-comparison.tsx"),
     route("stacks/compare/print", "routes/_print/comparison.tsx"),
     route("stacks/:stackId/sweep/print", "routes/_print/sweep.tsx"),
   ]),
@@ -52,6 +53,9 @@ export default [
       route("new", "routes/_app/flows/new.tsx"),
       route("assess", "routes/_app/flows/assess.tsx"),
       route("mark", "routes/_app/flows/mark.ts"),
+      route("compare", "routes/_app/flows/compare.tsx"),
+      route("compare.csv", "routes/_app/flows/compare-csv.ts"),
+      route("compare.svg", "routes/_app/flows/compare-svg.ts"),
       ...prefix("library", [
         route(":kind", "routes/_app/flows/library.tsx"),
         route("steps/new", "routes/_app/flows/new-step-template.tsx"),

@@ -44,6 +44,7 @@ const WITHIN: (Page & { open: (actor: Actor) => boolean })[] = [
     open: (actor) => mayOnSite(actor, "edit films"),
   },
   { name: "Compare stacks", path: "/stacks/compare", also: "overlay", open: seesWork },
+  { name: "Compare flows", path: "/flows/compare", also: "variants, splits, overlay", open: seesWork },
   { name: "Sweep a stack", path: "/stacks/sweep", also: "map, contours, curve over an input", open: seesWork },
   { name: "Carriers", path: "/carriers/carriers", open: seesLibrary },
   { name: "Bonding materials", path: "/carriers/bonding-materials", also: "adhesives", open: seesLibrary },

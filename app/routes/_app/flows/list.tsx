@@ -8,6 +8,7 @@ import { ListHead } from "#app/components/ui/ListHead.tsx";
 import { TickBar } from "#app/components/ui/ticks/TickBar.tsx";
 import { tickColumn } from "#app/components/ui/ticks/tick-column.tsx";
 import { useTicked } from "#app/components/ui/ticks/use-ticked.ts";
+import { MOST_COMPARED } from "#app/lib/comparison/asked.ts";
 import { formatBare } from "#app/lib/format-measured.ts";
 import { revisionLetters } from "#app/lib/assessment-revision.ts";
 import { readListParams } from "#app/lib/list-params.ts";
@@ -122,6 +123,7 @@ export default function Flows({ loaderData }: Route.ComponentProps) {
             what={["flow", "flows"]}
             onPage={page.rows.map(({ id }) => id)}
             actions={[
+              { label: "Compare", to: "/flows/compare", least: 2, most: MOST_COMPARED },
               ...(mayAssess ? [{ label: "Assess again", to: "/flows/assess", most: MOST_TICKED }] : []),
               { label: "Mark as favourites", to: "/flows/mark", method: "post", most: MOST_TICKED },
             ]}

@@ -9,8 +9,8 @@ import { ListHead } from "#app/components/ui/ListHead.tsx";
 import { TickBar } from "#app/components/ui/ticks/TickBar.tsx";
 import { tickColumn } from "#app/components/ui/ticks/tick-column.tsx";
 import { useTicked } from "#app/components/ui/ticks/use-ticked.ts";
+import { MOST_COMPARED } from "#app/lib/comparison/asked.ts";
 import { readListParams } from "#app/lib/list-params.ts";
-import { MOST_STACKS } from "#app/lib/stack-comparison/asked.ts";
 import { MOST_TICKED } from "#app/lib/ticked-ids.ts";
 import { programsWhere } from "#app/policies/permissions.ts";
 import { scopeOf } from "#app/server/contexts.server.ts";
@@ -76,7 +76,7 @@ export default function Stacks({ loaderData }: Route.ComponentProps) {
             what={["stack", "stacks"]}
             onPage={page.rows.map(({ id }) => id)}
             actions={[
-              { label: "Compare", to: "/stacks/compare", least: 2, most: MOST_STACKS },
+              { label: "Compare", to: "/stacks/compare", least: 2, most: MOST_COMPARED },
               ...(mayEdit ? CHANGES : []),
             ]}
           />
