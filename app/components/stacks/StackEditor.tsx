@@ -2,6 +2,7 @@ import { getFormProps, type SubmissionResult } from "@conform-to/react";
 import { lazy, Suspense, useCallback, useDeferredValue, useMemo, useState } from "react";
 import { Form } from "react-router";
 import { FormHead } from "#app/components/forms/FormHead.tsx";
+import { PlainInput } from "#app/components/forms/PlainInput.tsx";
 import { UnsavedGuard } from "#app/components/forms/UnsavedGuard.tsx";
 import { useRecordForm } from "#app/components/forms/use-record-form.ts";
 import { useInBrowser } from "#app/components/ui/use-in-browser.ts";
@@ -204,8 +205,10 @@ export function StackEditor(props: Props) {
             />
           )}
         </Suspense>
-        {basis.version !== null && <input type="hidden" name="version" value={conflict?.version ?? basis.version} />}
-        {programs === null && <input type="hidden" name="program" value={basis.text.program} />}
+        {basis.version !== null && (
+          <PlainInput type="hidden" name="version" value={conflict?.version ?? basis.version} />
+        )}
+        {programs === null && <PlainInput type="hidden" name="program" value={basis.text.program} />}
         <StackPanes
           build={
             <>
