@@ -6,6 +6,7 @@ import { watchConnections } from "./server/connection.server.ts";
 import { nonceContext } from "./server/contexts.server.ts";
 import { stopGracefully } from "./server/graceful-stop.server.ts";
 import { log } from "./server/log.server.ts";
+import { loggedPath } from "./server/logged-path.server.ts";
 
 watchConnections();
 stopGracefully();
@@ -50,7 +51,7 @@ export function handleError(error: unknown, { request }: { request: Request }): 
   if (request.signal.aborted) return;
   log.error(
     {
-      path: new URL(request.url).pathname,
+      path: loggedPath(request),
       error: error instanceof Error ? (error.stack ?? error.message) : String(error),
     },
     "a request failed",

@@ -3,7 +3,10 @@ import { index, layout, prefix, route, type RouteConfig } from "@react-router/de
 export default [
   route("healthz", "routes/healthz.ts"),
   route("readyz", "routes/readyz.ts"),
-  layout("routes/_public/layout.tsx", [route("sign-in", "routes/_public/sign-in.tsx")]),
+  layout("routes/_public/layout.tsx", [
+    route("sign-in", "routes/_public/sign-in.tsx"),
+    route("unsubscribe/:token", "routes/_public/unsubscribe.tsx"),
+  ]),
   route("sign-out", "routes/_auth/sign-out.ts"),
   ...prefix("api/v1", [
     route("estimates", "routes/api.v1/estimates.ts"),
@@ -13,7 +16,9 @@ export default [
   ]),
   layout("routes/_print/layout.tsx", [
     route("sheets/:assessmentId", "routes/_print/sheet.tsx"),
+    route("sheets/:assessmentId/draft.pdf", "routes/_print/draft-pdf.ts"),
     route("assessments/change-request/print", "routes/_print/change-request.tsx"),
+    route("flows/compare/print", "routes/_print/flow-comparison.tsx"),
     route("stacks/compare/print", "routes/_print/comparison.tsx"),
     route("stacks/:stackId/sweep/print", "routes/_print/sweep.tsx"),
   ]),
@@ -32,6 +37,8 @@ export default [
     ...prefix("stacks", [
       index("routes/_app/stacks/list.tsx"),
       route("new", "routes/_app/stacks/new.tsx"),
+      route("duplicate", "routes/_app/stacks/duplicate.tsx"),
+      route("remove", "routes/_app/stacks/remove.tsx"),
       route("compare", "routes/_app/stacks/compare.tsx"),
       route("compare.csv", "routes/_app/stacks/compare-csv.ts"),
       route("compare.svg", "routes/_app/stacks/compare-svg.ts"),
@@ -44,6 +51,11 @@ export default [
     ...prefix("flows", [
       index("routes/_app/flows/list.tsx"),
       route("new", "routes/_app/flows/new.tsx"),
+      route("assess", "routes/_app/flows/assess.tsx"),
+      route("mark", "routes/_app/flows/mark.ts"),
+      route("compare", "routes/_app/flows/compare.tsx"),
+      route("compare.csv", "routes/_app/flows/compare-csv.ts"),
+      route("compare.svg", "routes/_app/flows/compare-svg.ts"),
       ...prefix("library", [
         route(":kind", "routes/_app/flows/library.tsx"),
         route("steps/new", "routes/_app/flows/new-step-template.tsx"),
@@ -114,6 +126,13 @@ export default [
     ]),
     route("demo", "routes/_app/demo.tsx"),
     route("preferences", "routes/_app/preferences.tsx"),
+    route("preferences/mail", "routes/_app/mail/choices.tsx"),
+    ...prefix("mail", [
+      index("routes/_app/mail/inbox.tsx"),
+      route("outbox", "routes/_app/mail/outbox.tsx"),
+      route(":mailId", "routes/_app/mail/mail.tsx"),
+      route(":mailId/html", "routes/_app/mail/html.ts"),
+    ]),
     route("favourites", "routes/_app/favourites.tsx"),
     route("saved-filters", "routes/_app/saved-filters.ts"),
     route("search", "routes/_app/search.tsx"),

@@ -6,6 +6,7 @@ import { chromiumPackage, findChromium } from "./chromium.mjs";
 import { makeDatabase } from "./database.mjs";
 import { installDebianPackages } from "./debian.mjs";
 import { lastLinesOf } from "./logs.mjs";
+import { mailSettings } from "./mail-server.mjs";
 import { freePort, loopback } from "./ports.mjs";
 import { prepareDatabase } from "./prepare.mjs";
 import { packageProgram, root } from "./project.mjs";
@@ -30,7 +31,12 @@ async function serveForTests({ keeper, env }, { folder, database, accountsFile }
   await prepareDatabase(keeper, access, { accountsFile, env });
   const port = await freePort();
   const logFile = join(folder, "server.log");
-  const served = { ...env, DATABASE_URL: access.appUrl };
+  const served = await mailSettings(keeper, {
+    env: { ...env, DATABASE_URL: access.appUrl, SMTP_URL: undefined },
+    address: `http://${loopback}:${port}`,
+    folder: join(folder, "mail"),
+    own: true,
+  });
   await serveBuild(keeper, { port, logFile, env: served });
   keepWorker(keeper, { env: { ...served, NODE_ENV: "production" }, logFile: join(folder, "worker.log") });
   return { port, logFile, ownerUrl: access.ownerUrl };

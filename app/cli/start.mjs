@@ -16,6 +16,7 @@ import { startLocalDatabase } from "./local-database.mjs";
 import { holdLock } from "./lock.mjs";
 import { lastLinesOf } from "./logs.mjs";
 import { checkNodeVersion } from "./node-version.mjs";
+import { mailSettings } from "./mail-server.mjs";
 import { loopback, requireFreePort, wantedPort } from "./ports.mjs";
 import { prepareDatabase } from "./prepare.mjs";
 import { makeOwnFolder, ownFolder } from "./project.mjs";
@@ -70,14 +71,19 @@ async function run(keeper, { port, external }) {
   if (!isDev) await buildWhenChanged(keeper);
 
   // The server gets the plain role alone.
-  const env = { ...process.env, DATABASE_URL: database.appUrl, DATABASE_OWNER_URL: undefined };
+  const address = `http://${loopback}:${port}`;
+  const env = await mailSettings(keeper, {
+    env: { ...process.env, DATABASE_URL: database.appUrl, DATABASE_OWNER_URL: undefined },
+    address,
+    folder: join(ownFolder, "mail"),
+    own: !external,
+  });
   const server = isDev
     ? await serveSources(keeper, { port, env })
     : await serveBuild(keeper, { port, env, logFile: serverLog });
   const mode = isDev ? "development" : "production";
   keepWorker(keeper, { env: { ...env, NODE_ENV: mode }, ...(!isDev && { logFile: workerLog }) });
 
-  const address = `http://${loopback}:${port}`;
   doing = `runs at ${address}`;
   const accounts = external ? [] : demoAccountLines(accountsFile);
   console.log(["", `Planeward ${doing}`, "", ...accounts, ...(accounts.length ? [""] : [])].join("\n"));

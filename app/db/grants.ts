@@ -17,7 +17,11 @@ const ADD_ONLY = [
   "sheet_comment",
   "sheet_print",
 ];
+<<<<<<< HEAD
 const NEVER_TAKEN_OUT = ["film_stress_value", "step_measurement", "sheet", "sheet_revision", "deviation"];
+=======
+const NEVER_TAKEN_OUT = ["film_stress_value", "step_measurement", "mail_outbox"];
+>>>>>>> main
 const READ_AND_WRITE = [
   "person",
   "credential",
@@ -53,6 +57,7 @@ const READ_AND_WRITE = [
   "favourite",
   "saved_filter",
   "preference",
+  "mail_choice",
 ];
 
 /** SQL that gives the role its rights and nothing more. */

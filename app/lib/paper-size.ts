@@ -11,5 +11,5 @@ export const MARGIN = 10;
 
 /** The paper that an address asks for; A4 for anything else. */
 export function paperAskedFor(asked: string | null): Paper {
-  return asked === "letter" ? "letter" : "a4";
+  return asked?.toLowerCase() === "letter" ? "letter" : "a4";
 }

@@ -1,6 +1,7 @@
 import type { MiddlewareFunction } from "react-router";
 import { environment } from "#app/server/environment.server.ts";
 import { log } from "#app/server/log.server.ts";
+import { loggedPath } from "#app/server/logged-path.server.ts";
 
 const SAFE = new Set(["GET", "HEAD", "OPTIONS"]);
 
@@ -16,7 +17,7 @@ export function comesFromUs(request: Request, allowed: readonly string[]): boole
 /** Refuses a change asked for by another site's page; the router's own check leaves resource routes out. */
 export const originCheck: MiddlewareFunction<Response> = async ({ request }, next) => {
   if (comesFromUs(request, environment.ALLOWED_ORIGINS)) return next();
-  log.warn({ origin: request.headers.get("Origin"), path: new URL(request.url).pathname }, "foreign origin refused");
+  log.warn({ origin: request.headers.get("Origin"), path: loggedPath(request) }, "foreign origin refused");
   return new Response("This request came from another site, so it was not carried out.\n", {
     status: 403,
     headers: { "Content-Type": "text/plain; charset=utf-8" },

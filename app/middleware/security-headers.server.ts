@@ -28,7 +28,8 @@ export const securityHeaders: MiddlewareFunction<Response> = async ({ context },
   context.set(nonceContext, nonce);
   const response = await next();
   const { headers } = response;
-  headers.set("Content-Security-Policy", contentSecurityPolicy(nonce));
+  // What is not a page of ours, such as a mail that is looked at, says itself how little it may.
+  if (!headers.has("Content-Security-Policy")) headers.set("Content-Security-Policy", contentSecurityPolicy(nonce));
   headers.set("Referrer-Policy", "same-origin");
   headers.set("Cross-Origin-Opener-Policy", "same-origin");
   headers.set("Permissions-Policy", "camera=(), geolocation=(), microphone=()");

@@ -29,6 +29,13 @@ const seesLibrary = (actor: Actor) => mayOnSite(actor, "see the library");
 const WITHIN: (Page & { open: (actor: Actor) => boolean })[] = [
   { name: "Favourites", path: "/favourites", also: "marked, starred", open: seesLibrary },
   { name: "Preferences", path: "/preferences", also: "theme, dark, density, settings", open: () => true },
+  { name: "E-mail", path: "/preferences/mail", also: "mail, digest, unsubscribe, notifications", open: () => true },
+  {
+    name: "Outbox",
+    path: "/mail/outbox",
+    also: "mail that waits, was sent or is parked",
+    open: (actor) => programsWhere(actor, "see the outbox").length > 0,
+  },
   { name: "Compare films", path: "/films/compare", open: seesLibrary },
   {
     name: "Import films",
@@ -37,6 +44,7 @@ const WITHIN: (Page & { open: (actor: Actor) => boolean })[] = [
     open: (actor) => mayOnSite(actor, "edit films"),
   },
   { name: "Compare stacks", path: "/stacks/compare", also: "overlay", open: seesWork },
+  { name: "Compare flows", path: "/flows/compare", also: "variants, splits, overlay", open: seesWork },
   { name: "Sweep a stack", path: "/stacks/sweep", also: "map, contours, curve over an input", open: seesWork },
   { name: "Carriers", path: "/carriers/carriers", open: seesLibrary },
   { name: "Bonding materials", path: "/carriers/bonding-materials", also: "adhesives", open: seesLibrary },

@@ -60,7 +60,7 @@ const hands = z.strictObject({
   program: text,
   /** 'Effective from 2026-12-01 07:55 UTC'; null for a draft */
   effective: text.nullable(),
-  /** 'Any lot of the program', or the lots that it is pinned to; null leaves room to write */
+  /** 'Any lot of the program', or 'Lot TRN-24-017' that it is pinned to; null leaves room to write */
   lots: text.nullable(),
   outcome: z.enum(OUTCOMES),
   /** 'first at step 12'; null when it is clear */
@@ -93,13 +93,9 @@ const stepRow = z.strictObject({
   /** what holds it changes here */
   newSupport: z.boolean(),
   bow: bowLine,
-  /** its own scale where it is not the page's */
-  scale: z.number().nullable(),
   /** warp at 25 °C as it lies, µm */
   warp: text,
   lies: text,
-  /** standard bow, µm */
-  bowText: text,
   /** what its tool takes for the side that it lies on, µm */
   limit: text,
   outcome: z.enum(OUTCOMES),
@@ -129,8 +125,12 @@ const engineers = z.strictObject({
   noPlot: text.nullable(),
   /** figures that rest on an assumption, a line each */
   assumptions: texts,
-  /** what its figures mean and what they were made with */
+  /** what its figures mean */
+  meaning: text,
+  /** what they were made with */
   remarks: texts,
+  /** how its bow lines are read */
+  signs: text,
   /** since the last released revision, at most three lines */
   changes: texts.max(3),
 });
@@ -166,7 +166,14 @@ export const sheetDocument = z.strictObject({
   diameter: z.number(),
   titleBlock,
   /** where the code on paper leads, and its words; null for a draft */
-  status: z.strictObject({ address: z.url(), words: text }).nullable(),
+  status: z
+    .strictObject({
+      address: z.url(),
+      words: text,
+      /** the code, a path over so many modules */
+      code: z.strictObject({ size: z.number(), path: text }),
+    })
+    .nullable(),
   /** 'Uncontrolled when printed.' */
   uncontrolled: text,
   /** ISO date-time of the paper: when it became effective, or was assessed */

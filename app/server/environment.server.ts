@@ -1,20 +1,24 @@
 import { z } from "zod";
+import { mailSettings, requireWholeMail } from "./mail-settings.server.ts";
 
-const schema = z.object({
-  NODE_ENV: z.enum(["production", "development", "test"]).default("production"),
-  DATABASE_URL: z.url({ protocol: /^postgres(ql)?$/ }),
-  /** comma-separated origins that may post forms besides the server's own, for a proxy in front */
-  ALLOWED_ORIGINS: z
-    .string()
-    .default("")
-    .transform((text) =>
-      text
-        .split(",")
-        .map((origin) => origin.trim())
-        .filter(Boolean),
-    ),
-  LOG_LEVEL: z.enum(["debug", "info", "warn", "error", "silent"]).default("info"),
-});
+const schema = z
+  .object({
+    ...mailSettings,
+    NODE_ENV: z.enum(["production", "development", "test"]).default("production"),
+    DATABASE_URL: z.url({ protocol: /^postgres(ql)?$/ }),
+    /** comma-separated origins that may post forms besides the server's own, for a proxy in front */
+    ALLOWED_ORIGINS: z
+      .string()
+      .default("")
+      .transform((text) =>
+        text
+          .split(",")
+          .map((origin) => origin.trim())
+          .filter(Boolean),
+      ),
+    LOG_LEVEL: z.enum(["debug", "info", "warn", "error", "silent"]).default("info"),
+  })
+  .superRefine(requireWholeMail);
 
 export type Environment = z.infer<typeof schema>;
 

@@ -11,9 +11,7 @@ const NOWHERE = "00000000-0000-4000-8000-000000000000";
 async function idsOf(page: Page, ...names: string[]): Promise<string[]> {
   await page.goto("/stacks?sort=name");
   return Promise.all(
-    names.map(
-      async (name) => (await page.getByRole("checkbox", { name: `Compare ${name}` }).getAttribute("value")) ?? "",
-    ),
+    names.map(async (name) => (await page.getByRole("checkbox", { name: `Tick ${name}` }).getAttribute("value")) ?? ""),
   );
 }
 
@@ -45,12 +43,12 @@ test.describe("an engineer", () => {
 
   test("ticks stacks in the list and sees them side by side", async ({ page }) => {
     await page.goto("/stacks?sort=name");
-    const box = (name: string) => page.getByRole("checkbox", { name: `Compare ${name}` });
+    const box = (name: string) => page.getByRole("checkbox", { name: `Tick ${name}` });
     await scriptsAtWork(box(TERN));
     await box(TERN).check();
-    await expect(page.getByText("Tick one more.")).toBeVisible();
+    await expect(page.getByText("1 stack ticked. Compare: tick one more.")).toBeVisible();
     await box(PETREL).check();
-    await page.getByRole("button", { name: "Compare 2 stacks" }).click();
+    await page.getByRole("button", { name: "Compare", exact: true }).click();
     await expect(page).toHaveURL(/\/stacks\/compare\?of=/);
     await expect(page.getByRole("region", { name: "Compared" }).getByRole("listitem")).toHaveCount(2);
     await expect(page.getByText(/^A and B /)).toBeVisible();
@@ -180,9 +178,9 @@ test.describe("without scripts", () => {
   test("a technician ticks, compares, adds and removes, and sees chart and table", async ({ page }) => {
     await signIn(page, "technician");
     await page.goto("/stacks?sort=name");
-    await page.getByRole("checkbox", { name: `Compare ${TERN}` }).check();
-    await page.getByRole("checkbox", { name: `Compare ${PETREL}` }).check();
-    await page.getByRole("button", { name: "Compare stacks ticked" }).click();
+    await page.getByRole("checkbox", { name: `Tick ${TERN}` }).check();
+    await page.getByRole("checkbox", { name: `Tick ${PETREL}` }).check();
+    await page.getByRole("button", { name: "Compare", exact: true }).click();
     await expect(page).toHaveURL(/\/stacks\/compare\?of=/);
     await expect(page.getByRole("img", { name: /^Warp against silicon thickness, free wafers/ }).first()).toBeVisible();
     await expect(table(page).getByRole("row", { name: /^Diameter differs/ })).toContainText("300 mm");

@@ -22,12 +22,14 @@ const DOORS: Record<string, string> = {
   "/healthz": "200 200 200 200 200 200 200",
   "/readyz": "200 200 200 200 200 200 200",
   "/sign-in": "200 302 302 302 302 302 302",
+  "/unsubscribe/:token": "404 404 404 404 404 404 404",
   "/sign-out": "302 302 302 302 302 302 302",
   "/api/v1/estimates": "405 405 405 405 405 405 405",
   "/api/v1/scans": "405 405 405 405 405 405 405",
   "/api/v1/scans/:readingId": "401 404 200 200 200 200 404",
   "/api/v1/jobs/:jobId": "401 404 200 200 200 200 404",
   "/sheets/:assessmentId": "302 404 200 200 200 200 404",
+  "/sheets/:assessmentId/draft.pdf": "302 404 200 200 200 200 404",
   "/": "302 200 200 200 200 200 200",
   "/films": "302 403 200 200 200 200 200",
   "/films/new": "302 403 403 200 200 403 403",
@@ -39,6 +41,8 @@ const DOORS: Record<string, string> = {
   "/films/:filmId/stress.csv": "302 403 200 200 200 200 200",
   "/stacks": "302 403 200 200 200 200 403",
   "/stacks/new": "302 403 403 200 200 403 403",
+  "/stacks/duplicate": "302 403 403 200 200 403 403",
+  "/stacks/remove": "302 403 403 200 200 403 403",
   "/stacks/compare": "302 403 200 200 200 200 403",
   "/stacks/compare.csv": "302 403 400 400 400 400 403",
   "/stacks/compare.svg": "302 403 400 400 400 400 403",
@@ -50,7 +54,13 @@ const DOORS: Record<string, string> = {
   "/stacks/:stackId/sweep.svg": "302 404 200 200 200 200 404",
   "/stacks/:stackId/sweep/print": "302 404 200 200 200 200 404",
   "/flows": "302 403 200 200 200 200 403",
+  "/flows/assess": "302 403 403 200 200 403 403",
+  "/flows/mark": "302 302 302 302 302 302 302",
   "/flows/new": "302 403 403 200 200 403 403",
+  "/flows/compare": "302 403 200 200 200 200 403",
+  "/flows/compare.csv": "302 403 400 400 400 400 403",
+  "/flows/compare.svg": "302 403 400 400 400 400 403",
+  "/flows/compare/print": "302 403 400 400 400 400 403",
   "/flows/:flowId": "302 404 200 200 200 200 404",
   "/flows/:flowId/what-if": "302 404 403 200 200 403 404",
   "/flows/library/:kind": "302 403 200 200 200 200 200",
@@ -106,6 +116,11 @@ const DOORS: Record<string, string> = {
   "/import-profiles": "302 403 200 200 200 200 403",
   "/demo": "302 403 403 403 200 403 403",
   "/preferences": "302 200 200 200 200 200 200",
+  "/preferences/mail": "302 200 200 200 200 200 200",
+  "/mail": "302 200 200 200 200 200 200",
+  "/mail/outbox": "302 403 403 403 200 403 200",
+  "/mail/:mailId": "302 404 404 404 404 404 404",
+  "/mail/:mailId/html": "302 404 404 404 404 404 404",
   "/favourites": "302 200 200 200 200 200 200",
   "/saved-filters": "302 302 302 302 302 302 302",
   "/search": "302 200 200 200 200 200 200",
@@ -125,7 +140,10 @@ function addresses(entries: RouteConfigEntry[], above = ""): string[] {
 }
 
 /** What an address asks for that shows nothing without it. */
-const ASKED: Record<string, string> = { "/assessments/:assessmentId/working": "?step=14&shape=released" };
+const ASKED: Record<string, string> = {
+  "/assessments/:assessmentId/working": "?step=14&shape=released",
+  "/unsubscribe/:token": "?kind=digest",
+};
 
 /** Ids for an address: the step library has kinds of its own. */
 const idsFor = (address: string, ids: DoorIds): DoorIds =>

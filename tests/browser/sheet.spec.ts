@@ -11,7 +11,7 @@ async function printedPages(page: Page): Promise<number> {
 test.describe("an engineer", () => {
   test.beforeEach(({ page }) => signIn(page, "engineer"));
 
-  test("prints the sheet of an assessment, on one page of A4", async ({ page }) => {
+  test("prints the sheet of an assessment, one page for hands and one for engineers on A4", async ({ page }) => {
     await assessTern(page);
     const number = await page
       .getByRole("region", { name: "Title block" })
@@ -20,14 +20,20 @@ test.describe("an engineer", () => {
     await page.getByRole("link", { name: "Print the sheet" }).first().click();
     await expect(page).toHaveURL(/\/sheets\/[0-9a-f-]+$/);
     await expect(page).toHaveTitle(`Handling-risk sheet ${number} · Planeward`);
-    await expect(page.getByText("Draft, not released: not for the floor")).toBeVisible();
+    await expect(page.getByText("Draft, not released: not for the floor").first()).toBeVisible();
     await expect(page.getByRole("heading", { level: 1 })).toContainText("tape or ring from step 14");
     const groups = page.getByRole("table", { name: "Steps grouped by what holds the wafer" });
     await expect(groups.getByRole("rowheader")).toHaveCount(3);
     await expect(groups).toContainText("Do not heat above 80 °C on tape");
     await expect(groups).toContainText("Over 400 µm edges up or down");
-    await expect(page.getByRole("region", { name: "Page 1 of 1", exact: true })).toBeVisible();
-    expect(await printedPages(page)).toBe(1);
+    await expect(page.getByRole("region", { name: "Page 1 of 2", exact: true })).toBeVisible();
+    const steps = page.getByRole("table", { name: "Steps with their figures" });
+    await expect(steps.getByRole("rowheader")).toHaveCount(19);
+    await expect(page.getByRole("img", { name: /^Warp of the free wafer/ })).toBeVisible();
+    expect(await printedPages(page)).toBe(2);
+    const pdf = page.waitForEvent("download");
+    await page.getByRole("link", { name: "PDF" }).click();
+    expect((await pdf).suggestedFilename()).toMatch(new RegExp(`^Handling-risk sheet ${number} [A-Z]+ draft\\.pdf$`));
   });
 
   test("chooses Letter, and no page runs over", async ({ page }) => {

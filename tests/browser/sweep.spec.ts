@@ -8,7 +8,7 @@ const MAP = "?x=silicon&x-from=40+um&x-to=775+um&y=temperature&y-to=260+C&own=2+
 /** The address of the sweep of a stack of the demo. */
 async function sweepOf(page: Page, search = "", name = PETREL): Promise<string> {
   await page.goto("/stacks?sort=name");
-  const id = (await page.getByRole("checkbox", { name: `Compare ${name}` }).getAttribute("value")) ?? "";
+  const id = (await page.getByRole("checkbox", { name: `Tick ${name}` }).getAttribute("value")) ?? "";
   await page.goto(`/stacks/${id}/sweep${search}`);
   await expect(page.getByRole("heading", { name: "Sweep", exact: true })).toBeVisible();
   return id;

@@ -29,6 +29,7 @@ const PROGRAM_TABLES = [
   "sheet_comment",
   "deviation",
   "sheet_print",
+  "mail_outbox",
 ];
 const SITE_TABLES = [
   "film",
@@ -51,7 +52,7 @@ const SITE_TABLES = [
 ];
 
 /** What a person keeps for themselves. */
-const OWN_TABLES = ["recent_visit", "favourite", "saved_filter", "preference"];
+const OWN_TABLES = ["recent_visit", "favourite", "saved_filter", "preference", "mail_choice"];
 
 let engineer: ActorScope;
 let technician: ActorScope;
@@ -149,6 +150,7 @@ describe("what a person keeps for themselves", () => {
     favourite: ["kind, record_id, at", "'film', gen_random_uuid(), now()"],
     saved_filter: ["list, name, query, at", "'/films', 'metals', 'kind=metal', now()"],
     preference: ["value, at", "'{}', now()"],
+    mail_choice: ["value, unsubscribe_token, at", "'{}', gen_random_uuid()::text, now()"],
   };
   const insert = (table: string, person: string) => {
     const [names, values] = COLUMNS[table] ?? ["", ""];

@@ -31,6 +31,7 @@ const PROGRAM_TABLE: Record<keyof typeof PROGRAM_PERMISSIONS, string> = {
   "work on the floor": "  - y y y y -",
   "hold lots and clear stops of the shift": "- - y - y -",
   "clear every stop": "   - - - - y -",
+  "see the outbox": "     - - - - y y",
 };
 const SITE_TABLE: Record<keyof typeof SITE_PERMISSIONS, string> = {
   "see the library": "    - y y y y y",

@@ -40,7 +40,7 @@ test("stacks stand side by side in the order asked for, each with its curve and 
   const { stackComparison } = await comparisons();
   const view = await stackComparison(engineer, ask(idOf("petrel"), idOf("tern"), idOf("fulmar")));
   expect(view.missing).toBe(0);
-  expect(view.stacks.map(({ letter, program }) => `${letter} ${program}`)).toEqual(["A Petrel", "B Tern", "C Fulmar"]);
+  expect(view.members.map(({ letter, program }) => `${letter} ${program}`)).toEqual(["A Petrel", "B Tern", "C Fulmar"]);
   expect(view.compared?.chart.curves.map(({ letter }) => letter)).toEqual(["A", "B", "C"]);
   expect(view.compared?.crossings).toHaveLength(3);
   expect(view.compared?.sensitivities).toHaveLength(3);
@@ -85,7 +85,7 @@ test("more than six are not compared", async () => {
   expect(six.compared?.chart.curves).toHaveLength(6);
   const seven = ask(idOf("tern"), idOf("petrel"), ...copies);
   const view = await stackComparison(engineer, seven);
-  expect(view.stacks).toHaveLength(7);
+  expect(view.members).toHaveLength(7);
   expect(view.compared).toBeNull();
   await expect(comparedStacks(engineer, seven)).rejects.toEqual(status(400));
   await asOwner(database, "delete from stack where name like 'Copy %'");

@@ -18,7 +18,7 @@ const FONTS = [400, 500, 600].map(font).join("\n");
 const MARK = text("public/mark.svg");
 const PICTURES = [
   { file: "social-card.png", svg: text("app/cli/identity/social-card.svg"), width: 1200, height: 630 },
-  ...[180, 512].map((side) => ({ file: `icon-${side}.png`, svg: MARK, width: side, height: side })),
+  ...[72, 180, 512].map((side) => ({ file: `icon-${side}.png`, svg: MARK, width: side, height: side })),
 ];
 
 const browser = await chromium.launch({ executablePath: findChromium(), args: ["--no-sandbox"] });

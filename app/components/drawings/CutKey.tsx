@@ -1,10 +1,11 @@
+import { memo } from "react";
 import { colour } from "./colour.ts";
 import { coordinate } from "./coordinate.ts";
 import { CUT, layerHeight } from "./cut-layout.ts";
 import { OwnFigure, OwnHead } from "#app/components/units/OwnFigure.tsx";
 
 /** Four bars that show how height goes with thickness, at 0.4 of the drawn height, and what the arrows mean. */
-export function CutKey({ y }: { y: number }) {
+export const CutKey = memo(function CutKey({ y }: { y: number }) {
   return (
     <g aria-hidden="true">
       <text x={CUT.left} y={y} style={{ fill: colour("quiet") }}>
@@ -37,4 +38,4 @@ export function CutKey({ y }: { y: number }) {
       ))}
     </g>
   );
-}
+});

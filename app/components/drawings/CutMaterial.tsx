@@ -1,3 +1,4 @@
+import { memo } from "react";
 import { colour } from "./colour.ts";
 import { coordinate } from "./coordinate.ts";
 
@@ -17,7 +18,7 @@ export interface CutMaterialProps {
  * level lines polymer, dots oxide or nitride, rings solder, flat tint silicon, waves bonding material, short dashes
  * glass. Lines in a clipping svg and never a pattern, because patterns print as blocks.
  */
-export function CutMaterial({ kind, x, y, width, height }: CutMaterialProps) {
+export const CutMaterial = memo(function CutMaterial({ kind, x, y, width, height }: CutMaterialProps) {
   return (
     <>
       <rect x={x} y={y} width={width} height={height} fill={colour(kind === "silicon" ? "siwash" : "raised")} />
@@ -28,7 +29,7 @@ export function CutMaterial({ kind, x, y, width, height }: CutMaterialProps) {
       )}
     </>
   );
-}
+});
 
 type FillingProps = { kind: Exclude<MaterialKind, "silicon" | "blank">; width: number; height: number };
 

@@ -1,5 +1,6 @@
 import { getInputProps, type FieldMetadata } from "@conform-to/react";
 import type { InputHTMLAttributes, ReactNode } from "react";
+import { PlainInput } from "./PlainInput.tsx";
 
 interface Props {
   field: FieldMetadata<string | undefined>;
@@ -15,7 +16,7 @@ export function LineField({ field, label, hint, type = "text", className = "", i
   return (
     <div className={`field ${className}`}>
       <label htmlFor={field.id}>{label}</label>
-      <input {...getInputProps(field, { type })} {...input} key={field.key} aria-describedby={field.errorId} />
+      <PlainInput {...getInputProps(field, { type })} {...input} key={field.key} aria-describedby={field.errorId} />
       <small id={field.errorId}>{field.errors?.[0] ?? hint}</small>
     </div>
   );

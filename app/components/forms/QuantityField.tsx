@@ -3,6 +3,7 @@ import { useState, type ReactNode } from "react";
 import type { Dimension } from "#app/engine/units/dimensions.ts";
 import { parseQuantity } from "#app/engine/units/parse-quantity.ts";
 import { readQuantity, type QuantityRule } from "#app/lib/read-quantity.ts";
+import { PlainInput } from "./PlainInput.tsx";
 import { Understood, Verbatim } from "#app/components/units/Understood.tsx";
 
 interface Props {
@@ -33,9 +34,15 @@ export function QuantityField({ field, label, dimension, rule, example, hint, cl
   const reading = typed.trim() === "" ? null : read();
   const fault = error ?? (reading && !reading.ok ? reading.message : undefined);
   return (
-    <div className={`field ${className}`}>
+    <div
+      className={`field ${className}`}
+      onInput={({ target }) => {
+        setTyped((target as HTMLInputElement).value);
+        setAnswered(field.errors);
+      }}
+    >
       <label htmlFor={field.id}>{label}</label>
-      <input
+      <PlainInput
         {...getInputProps(field, { type: "text" })}
         key={field.key}
         inputMode="text"
@@ -44,10 +51,6 @@ export function QuantityField({ field, label, dimension, rule, example, hint, cl
         placeholder={example}
         aria-invalid={fault ? true : undefined}
         aria-describedby={field.errorId}
-        onInput={(event) => {
-          setTyped(event.currentTarget.value);
-          setAnswered(field.errors);
-        }}
       />
       <small id={field.errorId} aria-live="polite">
         {fault !== undefined ? (

@@ -26,10 +26,18 @@ interface Props<Row> {
   mayEdit: boolean;
   /** what else can be done with the list */
   more?: ReactNode;
+  /** column of boxes, and the bar above the table that says what is done with what is ticked */
+  ticks?: { column: Column<Row>; bar: ReactNode };
 }
 
 /** A list of the library: search, filters, sorted and paged table, or what belongs here when it is empty. */
-export function LibraryList<Row extends { id: string; name: string }>({ view, page, mayEdit, more }: Props<Row>) {
+export function LibraryList<Row extends { id: string; name: string }>({
+  view,
+  page,
+  mayEdit,
+  more,
+  ticks,
+}: Props<Row>) {
   const { title, one, many, path, filters, columns, belongs } = view;
   const { total, rows, params } = page;
   const searched = params.query !== "" || Object.values(params.filters).some(Boolean);
@@ -62,7 +70,15 @@ export function LibraryList<Row extends { id: string; name: string }>({ view, pa
       />
       <ListHead what={many} filters={filters} />
       {rows.length > 0 ? (
-        <DataTable caption={title} columns={[name, ...columns]} page={page} rowKey={({ id }) => id} />
+        <>
+          {ticks?.bar}
+          <DataTable
+            caption={title}
+            columns={[...(ticks ? [ticks.column] : []), name, ...columns]}
+            page={page}
+            rowKey={({ id }) => id}
+          />
+        </>
       ) : total > 0 ? (
         <EmptyState
           title={`There is no page ${params.page}`}

@@ -1,4 +1,4 @@
-import { Form } from "react-router";
+import { Form, Link } from "react-router";
 import { SubmitButton } from "#app/components/forms/SubmitButton.tsx";
 import { PageHead } from "#app/components/layout/PageHead.tsx";
 import { Notice } from "#app/components/ui/Notice.tsx";
@@ -38,7 +38,15 @@ export function PreferencesPage({ preferences, saved }: Props) {
   const { theme, density, singleKeys, length, stress, temperature, decimalMark } = preferences;
   return (
     <>
-      <PageHead title="Preferences" remark="For you alone, wherever you sign in" />
+      <PageHead
+        title="Preferences"
+        remark="For you alone, wherever you sign in"
+        actions={
+          <Link to="/preferences/mail" className="btn">
+            E-mail
+          </Link>
+        }
+      />
       {saved && <Notice kind="done" title="Your preferences are saved." />}
       <Form method="post" className="frame max-w-160">
         <Choices title="Theme" name="theme" words={THEME_WORDS} chosen={theme}>

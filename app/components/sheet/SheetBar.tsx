@@ -50,6 +50,9 @@ export function SheetBar({ assessmentId, paper, legs }: Props) {
             </Link>
           ))}
         </nav>
+        <a href={`/sheets/${assessmentId}/draft.pdf?paper=${paper}${legQuery("&", leg)}`} download className="btn">
+          PDF
+        </a>
         <PrintButton />
       </div>
     </header>

@@ -1,4 +1,5 @@
 import type { FormMetadata } from "@conform-to/react";
+import { memo } from "react";
 import { NoteField } from "#app/components/forms/NoteField.tsx";
 import type { useRecordForm } from "#app/components/forms/use-record-form.ts";
 import type { SiteLimits } from "#app/engine/rules/limits.ts";
@@ -11,12 +12,13 @@ import type { CutPartOf } from "./stack-cut-layers.ts";
 import { StackCut } from "./StackCut.tsx";
 import { fieldId } from "./stack-fields.ts";
 import { headStamp, StackHeadFields } from "./StackHeadFields.tsx";
-import { StackToolBar, type StackToolBarProps } from "./StackToolBar.tsx";
 import type { LayerEdits } from "./use-layer-edits.ts";
 
 interface Props {
   form: FormMetadata<StackText>;
   fields: ReturnType<typeof useRecordForm<StackText>>[1];
+  /** the same while no field has come, gone, been written or been found wrong; what is typed is in `draft` */
+  stamp: string;
   programs: readonly { id: string; name: string }[] | null;
   choices: StackChoices;
   draft: StackDraft;
@@ -27,21 +29,29 @@ interface Props {
   part: CutPartOf;
   focusPart: (part: CutPartOf) => void;
   edits: LayerEdits;
-  /** false without scripts, which all of it needs */
-  bar: false | Omit<StackToolBarProps, "onMirror">;
 }
 
-/** The left pane: what is built, the cut with the fields of its films beside it. */
-export function StackBuild(props: Props) {
-  const { form, fields, programs, choices, draft, drawn, panel, limits, part, focusPart, edits, bar } = props;
+/**
+ * The left pane: what is built, the cut with the fields of its films beside it. The proxies of the form's library are others with every
+ * key, so what they hold is told by `stamp` and `draft`.
+ */
+export const StackBuild = memo(
+  Build,
+  (before, after) =>
+    before.stamp === after.stamp &&
+    before.programs === after.programs &&
+    before.choices === after.choices &&
+    before.draft === after.draft &&
+    before.drawn === after.drawn &&
+    before.panel === after.panel &&
+    before.limits === after.limits &&
+    before.part === after.part,
+);
+
+function Build(props: Props) {
+  const { form, fields, programs, choices, draft, drawn, panel, limits, part, focusPart, edits } = props;
   return (
     <>
-      {bar ? (
-        <StackToolBar {...bar} onMirror={draft.layers.some(({ side }) => side === "front") ? edits.mirrorAll : null} />
-      ) : (
-        // Keeps its place until the scripts are there.
-        <div className="min-h-16 border-b border-line scriptless:hidden" />
-      )}
       <StackHeadFields
         fields={fields}
         programs={programs}

@@ -2,6 +2,7 @@ import { getFormProps, type SubmissionResult } from "@conform-to/react";
 import { lazy, Suspense, useCallback, useDeferredValue, useMemo, useState } from "react";
 import { Form } from "react-router";
 import { FormHead } from "#app/components/forms/FormHead.tsx";
+import { PlainInput } from "#app/components/forms/PlainInput.tsx";
 import { UnsavedGuard } from "#app/components/forms/UnsavedGuard.tsx";
 import { useRecordForm } from "#app/components/forms/use-record-form.ts";
 import { useInBrowser } from "#app/components/ui/use-in-browser.ts";
@@ -21,6 +22,7 @@ import { StackBuild } from "./StackBuild.tsx";
 import { StackFindings } from "./StackFindings.tsx";
 import { focusField, STACK_FORM } from "./stack-fields.ts";
 import { StackPanes } from "./StackPanes.tsx";
+import { StackToolBar } from "./StackToolBar.tsx";
 import type { CutPartOf } from "./stack-cut-layers.ts";
 import { useKeptDraft } from "./use-kept-draft.ts";
 import { useSaveOnceSaid } from "./use-save-once-said.ts";
@@ -68,23 +70,23 @@ export function StackEditor(props: Props) {
   const typed = stackText(form.value);
   const said = JSON.stringify(typed);
   const opened = useMemo(() => JSON.stringify(stackText(basis.text)), [basis]);
-  const draft = useStackDraft(said, choices);
   const history = useStackHistory(said);
+  // The field that is typed into comes first; what follows from it is drawn in pieces that the next key goes before.
+  const followed = useDeferredValue(said);
+  const draft = useStackDraft(history.typing ? followed : said, choices);
   const kept = useKeptDraft({ person, record: stackId ?? "new", version: basis.version, opened, said, saved });
   const [words, setWords] = useState("");
   const [filmFor, setFilmFor] = useState<number | null>(null);
   const [at, setAt] = useState(view.at);
-  const { temperature, read } = viewTemperature(at);
-  const live = useLiveEstimate(panelRequests(draft, temperature), props.panel, limits);
-  // The field comes first, then the drawings, which take longer and can wait for the next key.
+  const { temperature, read } = useMemo(() => viewTemperature(at), [at]);
+  const requests = useMemo(() => panelRequests(draft, temperature), [draft, temperature]);
+  const live = useLiveEstimate(requests, props.panel, limits);
   const [drawn, panel] = [useDeferredValue(draft), useDeferredValue(live.panel)];
   const focusPart = useCallback((part: CutPartOf) => {
     focusField(part === "silicon" ? "siliconThickness.value" : `layers[${part}].film`);
   }, []);
-  const selection = useSelectedLayer(
-    fields.layers.getFieldList().map(({ key }) => key ?? ""),
-    focusPart,
-  );
+  const filmKeys = fields.layers.getFieldList().map(({ key }) => key ?? "");
+  const selection = useSelectedLayer(filmKeys, focusPart);
   const edits = useLayerEdits({
     form,
     text: typed,
@@ -132,6 +134,28 @@ export function StackEditor(props: Props) {
     requestAnimationFrame(() => focusField(field));
   };
   const inBrowser = useInBrowser();
+  const options = useMemo(
+    () => (
+      <>
+        <ViewOptions
+          view={view}
+          others={others}
+          typed={{
+            at,
+            understood: read?.ok ? read.understood : undefined,
+            fault: read && !read.ok ? read.message : undefined,
+            onType: setAt,
+          }}
+        />
+        <noscript>
+          <button type="submit" name="intent" value="estimate" className="btn mb-3">
+            Work it out without saving
+          </button>
+        </noscript>
+      </>
+    ),
+    [view, others, at, read],
+  );
   const [found] = lastResult ? [] : kept.offered;
   return (
     <>
@@ -181,31 +205,40 @@ export function StackEditor(props: Props) {
             />
           )}
         </Suspense>
-        {basis.version !== null && <input type="hidden" name="version" value={conflict?.version ?? basis.version} />}
-        {programs === null && <input type="hidden" name="program" value={basis.text.program} />}
+        {basis.version !== null && (
+          <PlainInput type="hidden" name="version" value={conflict?.version ?? basis.version} />
+        )}
+        {programs === null && <PlainInput type="hidden" name="program" value={basis.text.program} />}
         <StackPanes
           build={
-            <StackBuild
-              form={form}
-              fields={fields}
-              programs={programs}
-              choices={choices}
-              draft={draft}
-              drawn={drawn}
-              panel={panel}
-              limits={limits}
-              part={selection.part}
-              focusPart={focusPart}
-              edits={edits}
-              bar={
-                inBrowser && {
-                  ways: { undo: history.undoTo !== null, redo: history.redoTo !== null },
-                  onStep: (direction) => onStep(direction, false),
-                  keptAt: kept.keptAt,
-                  said: words,
-                }
-              }
-            />
+            <>
+              {inBrowser ? (
+                <StackToolBar
+                  ways={{ undo: history.undoTo !== null, redo: history.redoTo !== null }}
+                  onStep={(direction) => onStep(direction, false)}
+                  onMirror={draft.layers.some(({ side }) => side === "front") ? edits.mirrorAll : null}
+                  keptAt={kept.keptAt}
+                  said={words}
+                />
+              ) : (
+                // Keeps its place until the scripts are there.
+                <div className="min-h-16 border-b border-line scriptless:hidden" />
+              )}
+              <StackBuild
+                form={form}
+                fields={fields}
+                stamp={JSON.stringify([form.key, form.initialValue, form.allErrors, filmKeys])}
+                programs={programs}
+                choices={choices}
+                draft={draft}
+                drawn={drawn}
+                panel={panel}
+                limits={limits}
+                part={selection.part}
+                focusPart={focusPart}
+                edits={edits}
+              />
+            </>
           }
           answer={<StackAnswer panel={live.panel} limits={limits} status={statusOf(draft.faults, live, goTo)} />}
           findings={
@@ -215,25 +248,7 @@ export function StackEditor(props: Props) {
               panel={panel}
               overlay={overlay}
               limits={limits}
-              options={
-                <>
-                  <ViewOptions
-                    view={view}
-                    others={others}
-                    typed={{
-                      at,
-                      understood: read?.ok ? read.understood : undefined,
-                      fault: read && !read.ok ? read.message : undefined,
-                      onType: setAt,
-                    }}
-                  />
-                  <noscript>
-                    <button type="submit" name="intent" value="estimate" className="btn mb-3">
-                      Work it out without saving
-                    </button>
-                  </noscript>
-                </>
-              }
+              options={options}
             />
           }
         />

@@ -1,4 +1,4 @@
-import { lazy, Suspense, useMemo, type ReactNode } from "react";
+import { lazy, memo, Suspense, useMemo, type ReactNode } from "react";
 import { useInBrowser } from "#app/components/ui/use-in-browser.ts";
 import type { SiteLimits } from "#app/engine/rules/limits.ts";
 import type { ChartOthers } from "#app/lib/stack-chart.ts";
@@ -24,7 +24,8 @@ interface Props {
 }
 
 /** What follows from the stack besides the answer: the curve, the models side by side, what is assumed, the calculations. */
-export function StackFindings({ name, draft, panel, overlay, limits, options }: Props) {
+export const StackFindings = memo(function StackFindings(props: Props) {
+  const { name, draft, panel, overlay, limits, options } = props;
   const inBrowser = useInBrowser();
   const names = useMemo(() => turnFront(draft.layers).map((layer) => layer.name), [draft]);
   if (!panel) return <div className="border-t border-line px-4 py-4 tablet:px-6">{options}</div>;
@@ -42,4 +43,4 @@ export function StackFindings({ name, draft, panel, overlay, limits, options }: 
       <StackWorkings estimated={panel.room} names={names} />
     </>
   );
-}
+});

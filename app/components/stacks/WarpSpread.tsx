@@ -1,4 +1,4 @@
-import { useId, useState, type KeyboardEvent } from "react";
+import { memo, useId, useState, type KeyboardEvent } from "react";
 import { noBreak } from "#app/components/drawings/no-break.ts";
 import { RunProgress } from "#app/components/ui/RunProgress.tsx";
 import { TextField } from "#app/components/ui/TextField.tsx";
@@ -12,7 +12,7 @@ import { Understood } from "#app/components/units/Understood.tsx";
 const FIRST_LIMIT = "400 µm";
 
 /** How many wafers with this stack would exceed a warp, by drawing wafers within the tolerances given. */
-export function WarpSpread({ estimated: { request, answer } }: { estimated: Estimated }) {
+export const WarpSpread = memo(function WarpSpread({ estimated: { request, answer } }: { estimated: Estimated }) {
   const id = useId();
   const [typed, setTyped] = useState(FIRST_LIMIT);
   const { state, key: asked, start, stop } = useWarpSampling();
@@ -81,7 +81,7 @@ export function WarpSpread({ estimated: { request, answer } }: { estimated: Esti
       )}
     </section>
   );
-}
+});
 
 /** Why there is nothing to draw, or null. */
 function whyNot({ regime, warp_standard_uncertainty_m }: Estimated["answer"]["shape"]): string | null {

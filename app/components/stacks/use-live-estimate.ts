@@ -1,4 +1,4 @@
-import { useCallback, useEffect, useState } from "react";
+import { startTransition, useCallback, useEffect, useMemo, useState } from "react";
 import type { SiteLimits } from "#app/engine/rules/limits.ts";
 import { postEstimate } from "#app/lib/post-estimate.ts";
 import { panelKey, type PanelRequests, type StackPanel } from "#app/lib/stack-panel.ts";
@@ -32,8 +32,8 @@ const keyOf = (panel: StackPanel | null) =>
 export function useLiveEstimate(wanted: PanelRequests | null, served: StackPanel | null, limits: SiteLimits): Live {
   const [panel, setPanel] = useState(served);
   const [failure, setFailure] = useState<{ key: string; sentence: string } | null>(null);
-  const key = wanted && panelKey(wanted);
-  const shown = keyOf(panel);
+  const key = useMemo(() => wanted && panelKey(wanted), [wanted]);
+  const shown = useMemo(() => keyOf(panel), [panel]);
   const failed = failure !== null && failure.key === key;
   const ask = key !== null && key !== shown && !failed ? key : null;
   useEffect(() => {
@@ -49,7 +49,7 @@ export function useLiveEstimate(wanted: PanelRequests | null, served: StackPanel
       void compute(JSON.parse(ask) as PanelRequests, limits, controller.signal).then((computed) => {
         if (controller.signal.aborted) return;
         if ("sentence" in computed) setFailure({ key: ask, sentence: computed.sentence });
-        else setPanel(computed);
+        else startTransition(() => setPanel(computed));
       });
     }, PAUSE);
     return () => {

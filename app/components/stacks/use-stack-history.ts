@@ -13,6 +13,8 @@ export function useStackHistory(said: string) {
   if (!typing && said !== standing(history)) setHistory(note(history, said));
   const now = note(history, said);
   return {
+    /** whether text is being typed into a field */
+    typing,
     /** whether a field holds text that has not been noted yet */
     unnoted: now !== history,
     undoTo: stateAfter(now, "undo"),

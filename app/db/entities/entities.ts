@@ -18,6 +18,8 @@ import { FlowTemplate } from "./flow-template.ts";
 import { ImportProfile } from "./import-profile.ts";
 import { Job } from "./job.ts";
 import { Lot } from "./lot.ts";
+import { MailChoice } from "./mail-choice.ts";
+import { MailOutbox } from "./mail-outbox.ts";
 import { Membership } from "./membership.ts";
 import { Person } from "./person.ts";
 import { Preference } from "./preference.ts";
@@ -99,6 +101,8 @@ export const entities = [
   Favourite,
   SavedFilter,
   Preference,
+  MailOutbox,
+  MailChoice,
   DemoRecord,
   AuditEvent,
 ];

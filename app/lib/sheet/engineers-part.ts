@@ -1,12 +1,9 @@
-import { setAsideExaggeration } from "#app/components/drawings/set-aside-exaggeration.ts";
+import { chooseExaggeration } from "#app/components/drawings/choose-exaggeration.ts";
 import { supportClassOf } from "#app/engine/vocabulary.ts";
 import type { AssessmentResult, StepResult } from "#app/schemas/assessment-result.ts";
 import type { SheetEngineers, SheetStepRow } from "#app/schemas/sheet-document.ts";
-import { micrometres } from "../assessment-figure.ts";
 import { legAnswer } from "../assessment-leg.ts";
 import { stepRows, type StepRow } from "../assessment-steps.ts";
-import { withoutUnit } from "../format-measured.ts";
-import { isRolled } from "../lying-as.ts";
 import { holdWords } from "../run-words.ts";
 import type { SheetView } from "../sheet-view.ts";
 import { stepsInWords } from "../step-numbers.ts";
@@ -26,19 +23,21 @@ export function engineersPart(
   const { result: walked } = legAnswer(source.result, source.leg === null ? null : String(source.leg));
   const result = { ...walked, steps: walked.steps.filter(({ skipped }) => !skipped) };
   const rows = stepRows(result);
-  const bows = rows.map(({ bow }) => (bow.shape.kind === "bowed" ? bow.shape.bow : 0));
-  const { common, own } = setAsideExaggeration(bows, result.wafer.diameter);
+  const bows = rows.flatMap(({ bow }) => (bow.shape.kind === "bowed" ? [bow.shape.bow] : []));
   const plot = warpByThickness(source.input, walked.slots ?? slotsOf(source, legs?.chosen.number ?? null));
   return {
-    exaggeration: common,
+    exaggeration: chooseExaggeration(bows, result.wafer.diameter),
     steps: result.steps.flatMap((step, index) => {
       const row = rows[index];
-      return row ? [sheetRow(step, row, { before: result.steps[index - 1], scale: own[index] ?? null })] : [];
+      return row ? [sheetRow(step, row, result.steps[index - 1])] : [];
     }),
     plot,
     noPlot: plot ? null : "The free wafer stays as good as flat at every thickness of this flow.",
     assumptions: assumptions(result),
+    meaning: "± is the expanded uncertainty, k = 2. Warp at 25 °C after the step as it lies, gravity left out.",
     remarks: remarks(source, result, changedSince),
+    signs:
+      "Drawn as it lies; the thin second line is the device side. Open band: carrier. Dashes: tape. Squares: frame or ring. Brackets: gripper. Rolled up: ×1.",
     changes: (facts.release?.changes ?? []).slice(0, 3),
   };
 }
@@ -46,14 +45,9 @@ export function engineersPart(
 const slotsOf = ({ result }: SheetSource, leg: number | null) =>
   leg === null ? null : (result.legs?.[leg - 1]?.slots ?? null);
 
-function sheetRow(
-  step: StepResult,
-  row: StepRow,
-  { before, scale }: { before: StepResult | undefined; scale: number | null },
-): SheetStepRow {
-  const { atRoom, planned, plannedName } = step;
+function sheetRow(step: StepResult, row: StepRow, before: StepResult | undefined): SheetStepRow {
+  const { planned, plannedName } = step;
   const minutes = (step.holdTime ?? 0) > 0 ? holdWords(step, "min") : null;
-  const rolled = atRoom !== null && isRolled(atRoom);
   return {
     number: row.number,
     title: row.title,
@@ -63,10 +57,8 @@ function sheetRow(
     support: supportClassOf(planned),
     newSupport: before !== undefined && (before.planned !== planned || before.plannedName !== plannedName),
     bow: row.bow,
-    scale: rolled ? 1 : scale,
     warp: row.warpText,
     lies: row.liesAs,
-    bowText: atRoom && !rolled ? withoutUnit(micrometres(atRoom.bow, atRoom.standardUncertainty)) : "–",
     limit: row.limitText,
     outcome: row.outcome,
     finding: row.note === null ? null : `${row.note}${row.more > 0 ? `, ${row.more} more` : ""}`,
@@ -84,10 +76,8 @@ function assumptions({ assumed }: AssessmentResult): string[] {
 }
 
 function remarks({ head, input }: SheetSource, result: AssessmentResult, changedSince: string | null): string[] {
-  const flow = `${result.assumed.length} of ${result.inputs} inputs are assumed, not measured.`;
   return [
-    "± is the expanded uncertainty, k = 2. Warp and bow at 25 °C after the step, gravity left out; bow is the standard one, positive with the centre high and the device side up.",
-    `${flow} Silicon ${input.flow.wafer.orientation === "100" ? "(001)" : "(111)"}.`,
+    `${result.assumed.length} of ${result.inputs} inputs are assumed, not measured. Silicon ${input.flow.wafer.orientation === "100" ? "(001)" : "(111)"}.`,
     `Engine ${head.engineVersion}, inputs ${head.inputHash.slice(0, 12)}, assessed ${head.createdAt.slice(0, 10)}${changedSince === null ? "" : "; inputs have changed since"}.`,
   ];
 }

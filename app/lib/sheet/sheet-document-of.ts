@@ -6,6 +6,7 @@ import type { SheetDocument, SheetHands } from "#app/schemas/sheet-document.ts";
 import type { AssessmentHead } from "../assessment-view.ts";
 import { CAUTIONS } from "../cautions.ts";
 import { sheetView, type SheetView } from "../sheet-view.ts";
+import { codePath } from "./qr-path.ts";
 import { engineersPart } from "./engineers-part.ts";
 import type { SheetFacts } from "./sheet-facts.ts";
 
@@ -46,7 +47,11 @@ export function sheetDocumentOf(source: SheetSource, facts: SheetFacts): SheetDo
     mark: markOf(release),
     diameter: view.diameter,
     titleBlock,
-    status: release && { address: release.statusAddress, words: "Still current? Scan." },
+    status: release && {
+      address: release.statusAddress,
+      words: "Still current? Scan.",
+      code: codePath(release.statusAddress),
+    },
     uncontrolled: "Uncontrolled when printed.",
     dated: release?.effectiveFrom ?? source.head.createdAt,
     hands: handsPart(view, facts),
@@ -119,8 +124,8 @@ function notices(view: SheetView, release: SheetFacts["release"]): string[] {
 
 function lotsOf({ lot }: SheetView, { lots, release }: SheetFacts): string | null {
   const pinned = [...new Set([...(lot === null ? [] : [lot]), ...lots])];
-  if (pinned.length > 0) return pinned.join(", ");
-  return release ? "any lot of the program" : null;
+  if (pinned.length > 0) return `${pinned.length === 1 ? "Lot" : "Lots"} ${pinned.join(", ")}`;
+  return release ? "Any lot of the program" : null;
 }
 
 /** Every text with its values tied to their units, so that none wraps apart, on whatever paper. */

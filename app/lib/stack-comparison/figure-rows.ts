@@ -1,7 +1,8 @@
 import type { SiteLimits } from "#app/engine/rules/limits.ts";
 import { formatWithUncertainty } from "#app/engine/units/format.ts";
 import type { ShapeRegime } from "#app/engine/vocabulary.ts";
-import type { ComparedGroup, ComparedRow } from "#app/schemas/stack-comparison.ts";
+import type { ComparedGroup, ComparedRow } from "#app/schemas/comparison.ts";
+import { comparedRow, type RowCell } from "../comparison/compared-row.ts";
 import {
   bareFrom,
   lengthWords,
@@ -13,7 +14,7 @@ import {
   warpWords,
 } from "../stack-words.ts";
 import { COMPARED_AT, type ComparedStack, type StackFigures, type WarpAt } from "./figures.ts";
-import { atThickness, comparedRow, UNKNOWN } from "./rows.ts";
+import { atThickness, UNKNOWN } from "./rows.ts";
 
 const REGIMES: Record<ShapeRegime, string> = {
   linear: "small bow",
@@ -24,8 +25,6 @@ const REGIMES: Record<ShapeRegime, string> = {
 /** Said in the place of a warp that means nothing any more. */
 const ROLLED_UP = "rolled past half a turn";
 
-type Cell = ReturnType<Parameters<typeof comparedRow>[3]>;
-
 /** What the free wafers do, as rows: shape at the temperature (in words), warp over thickness, and what it takes to lift them. */
 export function figureGroups(
   stacks: readonly ComparedStack[],
@@ -33,7 +32,7 @@ export function figureGroups(
   limits: SiteLimits,
 ): ComparedGroup[] {
   const first = stacks[0]?.figures ?? null;
-  const row = (key: string, label: string, cellOf: (figures: StackFigures) => Cell) =>
+  const row = (key: string, label: string, cellOf: (figures: StackFigures) => RowCell) =>
     comparedRow(key, label, stacks, ({ figures }) => (figures ? cellOf(figures) : UNKNOWN));
   return [
     {
@@ -84,7 +83,7 @@ export function figureGroups(
 }
 
 /** The signed bow with its expanded uncertainty, k = 2; a curled wafer has none. */
-function bowCell({ estimated, bowUncertainty }: StackFigures): Cell {
+function bowCell({ estimated, bowUncertainty }: StackFigures): RowCell {
   const { shape } = estimated.answer;
   if (shape.regime === "curled" && shape.roll_radius_m !== null)
     return { text: "none, it rolls", note: `radius about ${radiusWords(shape.roll_radius_m)}` };
@@ -97,7 +96,7 @@ function bowCell({ estimated, bowUncertainty }: StackFigures): Cell {
   };
 }
 
-function warpCell(here: WarpAt | undefined, first: WarpAt | undefined): Cell {
+function warpCell(here: WarpAt | undefined, first: WarpAt | undefined): RowCell {
   if (!here) return UNKNOWN;
   if (here.rolledUp) return { text: ROLLED_UP };
   const apart = first && !first.rolledUp ? away(here.warp, first.warp) : null;

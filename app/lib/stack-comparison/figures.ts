@@ -1,10 +1,12 @@
 import { atItsTemperature, freeDisc, pullOf } from "#app/engine/stack/estimate-stack.ts";
 import { withThickness, type StackInput } from "#app/engine/stack/model.ts";
 import { bowUncertainty } from "#app/engine/stack/warp-uncertainty.ts";
-import { reachedWaferShape, type ReachedWaferShape } from "#app/engine/plate/free-wafer-shape.ts";
+import { reachedWaferShape } from "#app/engine/plate/free-wafer-shape.ts";
 import type { ShapeRegime } from "#app/engine/vocabulary.ts";
 import type { ComparedInputs } from "#app/schemas/stack-comparison.ts";
-import { HALF_TURN } from "../stack-chart.ts";
+import type { LetteredCurve } from "../comparison/crossing-words.ts";
+import { remembered } from "../comparison/crossings.ts";
+import { shareOfHalfTurn } from "../comparison/half-turn.ts";
 import { stackOf } from "../stack-of-request.ts";
 import type { Estimated } from "../stack-words.ts";
 
@@ -64,14 +66,9 @@ export function warpAt(stack: StackInput, thickness: number): WarpAt {
   return { thickness, warp, regime, rolledUp: shareOfHalfTurn(shape, stack.wafer.diameter) >= 1 };
 }
 
-/** A roll that has closed is lower than one of half a turn: from this share of that one's radius on it tells by its radius. */
-const CLOSING = 0.75;
-
-/** How far a free wafer of a diameter (m) is rolled: from 1 on past half a turn across, where its warp means nothing any more. */
-export function shareOfHalfTurn(
-  { warp, rollRadius }: Pick<ReachedWaferShape, "warp" | "rollRadius">,
-  diameter: number,
-): number {
-  const halfTurn = (HALF_TURN * diameter) / 2;
-  return Math.max(warp / halfTurn, rollRadius === null ? 0 : (CLOSING * halfTurn) / rollRadius);
+/** The warp of each stack that can be estimated as a function of its silicon thickness. */
+export function stackCurves(stacks: readonly ComparedStack[]): LetteredCurve[] {
+  return stacks.flatMap(({ letter, figures }) =>
+    figures ? [{ letter, curve: remembered((thickness) => warpAt(figures.stack, thickness)) }] : [],
+  );
 }

@@ -1,38 +1,19 @@
 import type { Measured } from "#app/engine/measured.ts";
 import { formatQuantity } from "#app/engine/units/format.ts";
 import { SIDE_NAMES } from "#app/engine/vocabulary.ts";
-import type { ComparedGroup, ComparedRow } from "#app/schemas/stack-comparison.ts";
+import type { ComparedGroup, ComparedRow } from "#app/schemas/comparison.ts";
+import { comparedRow, type RowCell } from "../comparison/compared-row.ts";
 import { filmCutWords } from "../film-cut.ts";
 import { formatMeasured } from "../format-measured.ts";
 import { thicknessWords } from "../stack-words.ts";
 import type { ComparedStack } from "./figures.ts";
 import { filmSlots, type FilmSlot } from "./film-slots.ts";
 
-/** What one stack has in a row. `same`: what two stacks must share to count as alike; the text where nothing is said. */
-interface Cell {
-  text: string;
-  note?: string | null;
-  same?: unknown;
-}
-
-/** A row over all stacks, with what is not as in the first of them marked. */
-export function comparedRow<Stack>(
-  key: string,
-  label: string,
-  stacks: readonly Stack[],
-  cellOf: (stack: Stack, column: number) => Cell,
-): ComparedRow {
-  const made = stacks.map((stack, column) => cellOf(stack, column));
-  const keys = made.map(({ text, same = text }) => JSON.stringify(same));
-  const cells = made.map(({ text, note = null }, column) => ({ text, note, differs: keys[column] !== keys[0] }));
-  return { key, label, cells, differs: cells.some(({ differs }) => differs) };
-}
-
 /** Digits to which two inputs count as the same: what was typed in another unit must not differ. */
 const digits = (value: number | null) => value?.toPrecision(9) ?? null;
 const sameMeasured = ({ value, tolerance, source }: Measured) => [digits(value), digits(tolerance), source];
 
-const NOT_THERE: Cell = { text: "none", same: null };
+const NOT_THERE: RowCell = { text: "none", same: null };
 
 /** The inputs of stacks as rows: wafer, each film, and the order of films. */
 export function inputGroups(stacks: readonly ComparedStack[]): ComparedGroup[] {
@@ -69,7 +50,7 @@ function filmRows({ places, key }: FilmSlot, stacks: readonly ComparedStack[]): 
   const row = (
     part: string,
     label: string,
-    cellOf: (layer: ComparedStack["layers"][number], stack: ComparedStack, place: number) => Cell,
+    cellOf: (layer: ComparedStack["layers"][number], stack: ComparedStack, place: number) => RowCell,
   ) =>
     comparedRow(`${key} ${part}`, label, stacks, (stack, column) => {
       const place = places[column] ?? null;
@@ -95,10 +76,10 @@ function filmRows({ places, key }: FilmSlot, stacks: readonly ComparedStack[]): 
   ];
 }
 
-export const UNKNOWN: Cell = { text: "cannot be estimated" };
+export const UNKNOWN: RowCell = { text: "cannot be estimated" };
 
 /** Force of a film with its share of all pulls of the stack, whichever way they pull. */
-function forceCell(pulls: readonly number[], place: number): Cell {
+function forceCell(pulls: readonly number[], place: number): RowCell {
   const force = pulls[place] ?? 0;
   const all = pulls.reduce((sum, pull) => sum + Math.abs(pull), 0);
   const share = all === 0 ? 0 : Math.abs(force) / all;

@@ -2,7 +2,7 @@ import { warpModel } from "#app/engine/stack/warp-uncertainty.ts";
 import { firstOrderUncertainty } from "#app/engine/uncertainty/first-order.ts";
 import type { UncertainQuantity } from "#app/engine/uncertainty/quantity.ts";
 import { formatQuantity } from "#app/engine/units/format.ts";
-import type { StackSensitivity } from "#app/schemas/stack-comparison.ts";
+import type { ComparedSensitivity } from "#app/schemas/comparison.ts";
 import { lengthWords } from "../stack-words.ts";
 import type { ComparedStack } from "./figures.ts";
 
@@ -37,7 +37,7 @@ export function warpMovers({ figures }: Pick<ComparedStack, "figures">): { mover
 const halfWidth = (input: UncertainQuantity) => (input.distribution === "rectangular" ? input.halfWidth : 0);
 
 /** The largest movers of every stack in words, with bars on one scale for all. */
-export function sensitivityWords(stacks: readonly ComparedStack[]): StackSensitivity[] {
+export function sensitivityWords(stacks: readonly ComparedStack[]): ComparedSensitivity[] {
   const found = stacks.map((stack) => ({ stack, answer: stack.figures?.own.rolledUp ? null : warpMovers(stack) }));
   const largest = Math.max(0, ...found.flatMap(({ answer }) => answer?.movers.map(({ moves }) => moves) ?? []));
   return found.map(({ stack, answer }) => ({

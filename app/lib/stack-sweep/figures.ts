@@ -2,7 +2,7 @@ import { standardBow } from "#app/engine/stoney/bow.ts";
 import { reachedWaferShape } from "#app/engine/plate/free-wafer-shape.ts";
 import { freeDisc } from "#app/engine/stack/estimate-stack.ts";
 import type { StackInput } from "#app/engine/stack/model.ts";
-import { shareOfHalfTurn } from "../stack-comparison/figures.ts";
+import { shareOfHalfTurn } from "../comparison/half-turn.ts";
 
 /** What a free wafer with a stack comes to, SI; by the full model, the same as its estimate. */
 export interface SweptFigures {

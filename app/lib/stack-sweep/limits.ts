@@ -1,6 +1,6 @@
 import { thicknessLimits } from "#app/engine/rules/required-support.ts";
 import type { SiteLimits } from "#app/engine/rules/limits.ts";
-import type { ComparedTool } from "../stack-comparison/chart.ts";
+import type { ComparedTool } from "../comparison/limit-lines.ts";
 import { readQuantity } from "../read-quantity.ts";
 import { NO_LIMIT, type SweepAsked } from "./asked.ts";
 import type { SweepAnswer } from "./answers.ts";

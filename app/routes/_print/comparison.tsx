@@ -1,18 +1,20 @@
-import { ComparisonPaper } from "#app/components/stacks/compare/ComparisonPaper.tsx";
+import { StackComparisonPaper } from "#app/components/stacks/compare/StackComparisonPaper.tsx";
 import { paperAskedFor } from "#app/lib/paper-size.ts";
 import { scopeOf } from "#app/server/contexts.server.ts";
-import { stackComparison, wrongNumber } from "#app/services/stack-comparison/comparison.server.ts";
+import { STACKS } from "#app/lib/comparison/kinds.ts";
+import { wrongNumber } from "#app/services/comparison.server.ts";
+import { stackComparison } from "#app/services/stack-comparison/comparison.server.ts";
 import type { Route } from "./+types/comparison";
 
 export const meta: Route.MetaFunction = () => [{ title: "Comparison of stacks · Planeward" }];
 
 export async function loader({ context, url }: Route.LoaderArgs) {
   const scope = scopeOf(context);
-  const { asked, stacks, compared } = await stackComparison(scope, url.searchParams);
-  if (!compared) throw wrongNumber();
+  const { asked, members, compared } = await stackComparison(scope, url.searchParams);
+  if (!compared) throw wrongNumber(STACKS);
   return {
     asked,
-    stacks,
+    members,
     compared,
     paper: paperAskedFor(url.searchParams.get("paper")),
     preparedBy: scope.actor.name,
@@ -21,5 +23,5 @@ export async function loader({ context, url }: Route.LoaderArgs) {
 }
 
 export default function ComparisonPrint({ loaderData }: Route.ComponentProps) {
-  return <ComparisonPaper {...loaderData} />;
+  return <StackComparisonPaper {...loaderData} />;
 }

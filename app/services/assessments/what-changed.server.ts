@@ -2,11 +2,12 @@ import type { EntityManager } from "@mikro-orm/postgresql";
 import { ENGINE_VERSION } from "#app/engine/version.ts";
 import { inputChanges } from "#app/lib/input-changes.ts";
 import { movementOf } from "#app/lib/result-comparison.ts";
-import type { DatedChange, InputChange, InputRecord, OutOfDate } from "#app/schemas/assessment-changes.ts";
+import type { DatedChange, InputChange, OutOfDate } from "#app/schemas/assessment-changes.ts";
 import type { RecordStamp } from "#app/schemas/record-stamp.ts";
 import { inScope, type ActorScope } from "#app/server/scope.server.ts";
 import { findAssessment } from "./assessments.server.ts";
 import { compute } from "./compute.ts";
+import { KEPT_KINDS, KEPT_RECORDS } from "./kept-records.ts";
 import { presentFlow } from "./present-inputs.server.ts";
 
 /**
@@ -30,16 +31,6 @@ export async function whatChanged(scope: ActorScope, assessmentId: string): Prom
   });
 }
 
-/** Where a record is kept, and the column that an input names it by. */
-const KEPT = {
-  film: ["film", "id"],
-  carrier: ["carrier", "id"],
-  bondingMaterial: ["bonding_material", "id"],
-  tape: ["tape", "id"],
-  equipment: ["equipment", "id"],
-  limit: ["site_limit", "key"],
-} as const satisfies Record<Exclude<InputRecord, "flow">, readonly [string, string]>;
-
 interface Saved {
   key: string;
   updated_at: Date | string;
@@ -55,10 +46,10 @@ async function dated(
 ): Promise<DatedChange[]> {
   const stamps = new Map<string, { at: string; by: string | null }>();
   stamps.set(keyOf({ kind: "flow", id: null }), { at: flow.updatedAt, by: flow.updatedBy });
-  for (const kind of Object.keys(KEPT) as (keyof typeof KEPT)[]) {
+  for (const kind of KEPT_KINDS) {
     const keys = changes.flatMap(({ record }) => (record.kind === kind && record.id !== null ? [record.id] : []));
     if (keys.length === 0) continue;
-    const [table, column] = KEPT[kind];
+    const [table, column] = KEPT_RECORDS[kind];
     const rows = await em.execute<Saved[]>(
       `select record.${column}::text as key, record.updated_at, person.name
          from ${table} record left join person on person.id = record.updated_by_id where record.${column}::text in (?)`,

@@ -23,12 +23,38 @@ export async function setFavourite(scope: ActorScope, kind: KeptKind, id: string
     if (!(await mayOpen(em, scope, kind, id))) throw notFound(kind);
     if ((await em.count(Favourite, { person: scope.actor.id })) >= MOST)
       throw problem(409, `You have marked ${MOST} things. Take a mark away, then set this one.`);
-    await em.execute(
-      `insert into favourite (id, person_id, kind, record_id, at) values (?, ?, ?, ?, clock_timestamp())
-         on conflict (person_id, kind, record_id) do nothing`,
-      [randomUUID(), scope.actor.id, kind, id],
-    );
+    await insertMark(em, scope, kind, id);
   });
+}
+
+/**
+ * Marks several records of a kind, all in one transaction; those that are not the person's to open are passed over.
+ * @returns how many of them are marked now, whether before or not
+ * @throws 409 when there would be more than are kept; nothing is marked then
+ */
+export async function markFavourites(scope: ActorScope, kind: KeptKind, ids: readonly string[]): Promise<number> {
+  return inScope(scope, async (em) => {
+    let marked = 0;
+    for (const id of ids) {
+      if (!(await mayOpen(em, scope, kind, id))) continue;
+      await insertMark(em, scope, kind, id);
+      marked++;
+    }
+    if ((await em.count(Favourite, { person: scope.actor.id })) > MOST)
+      throw problem(
+        409,
+        `No more than ${MOST} marks are kept, and these would be more. Take marks away, or tick fewer.`,
+      );
+    return marked;
+  });
+}
+
+function insertMark(em: EntityManager, scope: ActorScope, kind: KeptKind, id: string) {
+  return em.execute(
+    `insert into favourite (id, person_id, kind, record_id, at) values (?, ?, ?, ?, clock_timestamp())
+       on conflict (person_id, kind, record_id) do nothing`,
+    [randomUUID(), scope.actor.id, kind, id],
+  );
 }
 
 /** Everything that the person has marked and may open, the newest first. */

@@ -1,20 +1,21 @@
 import type { SiteLimits } from "#app/engine/rules/limits.ts";
 import { ROOM_TEMPERATURE } from "#app/engine/laminate/layer.ts";
-import { LEAST_STACKS, MOST_STACKS, readComparison, type ComparisonAsked } from "#app/lib/stack-comparison/asked.ts";
-import { comparisonChart, warpLines, type ComparedTool } from "#app/lib/stack-comparison/chart.ts";
-import { allCrossings } from "#app/lib/stack-comparison/crossing-words.ts";
-import { stackFigures, type ComparedStack } from "#app/lib/stack-comparison/figures.ts";
+import { readComparison, type ComparisonAsked } from "#app/lib/comparison/asked.ts";
+import { allCrossings } from "#app/lib/comparison/crossing-words.ts";
+import { letterOf, STACKS } from "#app/lib/comparison/kinds.ts";
+import { warpLines, type ComparedTool } from "#app/lib/comparison/limit-lines.ts";
+import { comparisonChart } from "#app/lib/stack-comparison/chart.ts";
+import { stackCurves, stackFigures, type ComparedStack } from "#app/lib/stack-comparison/figures.ts";
 import { figureGroups } from "#app/lib/stack-comparison/figure-rows.ts";
-import { comparedOver, type ComparedOver } from "#app/lib/stack-comparison/range.ts";
+import { comparedOver, type ComparedOver } from "#app/lib/stack-comparison/over.ts";
 import { inputGroups } from "#app/lib/stack-comparison/rows.ts";
 import { sensitivityWords } from "#app/lib/stack-comparison/sensitivities.ts";
 import { comparisonSummary } from "#app/lib/stack-comparison/summary.ts";
 import { temperatureWords } from "#app/lib/stack-words.ts";
-import type { ComparedView, ComparisonView } from "#app/schemas/stack-comparison.ts";
-import { problem } from "#app/server/problem.server.ts";
+import type { ComparedStacks, StackComparisonView } from "#app/schemas/stack-comparison.ts";
 import type { ActorScope } from "#app/server/scope.server.ts";
 import { answerOrNull } from "../estimate-answer.ts";
-import { allOfLibrary } from "../library/library.server.ts";
+import { enoughToCompare, fileNameOf, toolsOf, wrongNumber } from "../comparison.server.ts";
 import { siteLimits } from "../limits.server.ts";
 import { requireInSomeProgram } from "../permission.server.ts";
 import { findStacks, requestOf, stackChoices, type StackDetail } from "../stacks.server.ts";
@@ -44,7 +45,7 @@ function compared(stacks: readonly StackDetail[], over: ComparedOver, limits: Si
     const answer = answerOrNull(request, limits);
     return {
       ...stack,
-      letter: String.fromCharCode(65 + n),
+      letter: letterOf(n),
       figures: answer && stackFigures({ request, answer }),
     };
   });
@@ -55,37 +56,22 @@ const thickestOf = (stacks: readonly StackDetail[]) =>
     ...stacks.map(({ silicon, siliconThickness }) => Math.max(silicon.nominalThickness, siliconThickness.value)),
   );
 
-/** Tools with a warp limit. */
-export async function toolsOf(scope: ActorScope): Promise<ComparedTool[]> {
-  const tools = await allOfLibrary(scope, "equipment");
-  return tools
-    .map(({ id, name, warpLimitEdgesUp, warpLimitEdgesDown, largestDiameter }) => ({
-      id,
-      name,
-      edgesUp: warpLimitEdgesUp?.value ?? null,
-      edgesDown: warpLimitEdgesDown?.value ?? null,
-      largestDiameter: largestDiameter.value,
-    }))
-    .filter(({ edgesUp, edgesDown }) => edgesUp !== null || edgesDown !== null);
-}
-
 /** Everything that the page and the paper of a comparison show; `compared` null with fewer stacks than two or more than six. */
-export async function stackComparison(scope: ActorScope, search: URLSearchParams): Promise<ComparisonView> {
+export async function stackComparison(scope: ActorScope, search: URLSearchParams): Promise<StackComparisonView> {
   const { asked, stacks, missing } = await askedStacks(scope, search);
   const [choices, limits, tools] = await Promise.all([stackChoices(scope), siteLimits(scope), toolsOf(scope)]);
-  const enough = stacks.length >= LEAST_STACKS && stacks.length <= MOST_STACKS;
   return {
     asked,
     missing,
-    stacks: stacks.map(({ id, name, program }, n) => ({
+    members: stacks.map(({ id, name, program }, n) => ({
       id,
       name,
       program: program.name,
-      letter: String.fromCharCode(65 + n),
+      letter: letterOf(n),
     })),
     choices: choices.filter(({ id }) => !asked.ids.includes(id)),
     tools: tools.map(({ id, name }) => ({ value: id, label: name })),
-    compared: enough ? comparedView(asked, stacks, { limits, tools }) : null,
+    compared: enoughToCompare(stacks) ? comparedView(asked, stacks, { limits, tools }) : null,
   };
 }
 
@@ -93,15 +79,15 @@ function comparedView(
   asked: ComparisonAsked,
   details: readonly StackDetail[],
   { limits, tools }: { limits: SiteLimits; tools: readonly ComparedTool[] },
-): ComparedView {
+): ComparedStacks {
   const over = comparedOver(asked, thickestOf(details));
   const { range } = over;
   const stacks = compared(details, over, limits);
   const diameters = stacks.map(({ silicon }) => silicon.diameter);
   const temperature = temperatureWords(over.temperature ?? ROOM_TEMPERATURE);
-  const crossings = allCrossings(stacks, range);
+  const crossings = allCrossings(stackCurves(stacks), range);
   const chart = comparisonChart(stacks, {
-    scale: asked.scale,
+    scale: asked.scale || "log",
     range,
     limits,
     warpLimits: warpLines(tools, asked.tool, diameters),
@@ -124,17 +110,10 @@ export async function comparedStacks(
   search: URLSearchParams,
 ): Promise<{ name: string; stacks: ComparedStack[] }> {
   const { asked, stacks } = await askedStacks(scope, search);
-  if (stacks.length < LEAST_STACKS || stacks.length > MOST_STACKS) throw wrongNumber();
+  if (!enoughToCompare(stacks)) throw wrongNumber(STACKS);
   const limits = await siteLimits(scope);
   return {
-    name: stacks
-      .map(({ name }) => name)
-      .join(", ")
-      .slice(0, 120),
+    name: fileNameOf(stacks),
     stacks: compared(stacks, comparedOver(asked, thickestOf(stacks)), limits),
   };
 }
-
-/** What a paper or a file is told that has too few stacks or too many. */
-export const wrongNumber = () =>
-  problem(400, "A comparison needs two to six stacks that you may see. Go back and choose them.");

@@ -12,7 +12,7 @@ import type { SweepView, SweptView } from "#app/schemas/stack-sweep.ts";
 import { problem } from "#app/server/problem.server.ts";
 import type { ActorScope } from "#app/server/scope.server.ts";
 import { siteLimits } from "../limits.server.ts";
-import { toolsOf } from "../stack-comparison/comparison.server.ts";
+import { toolsOf } from "../comparison.server.ts";
 import { getStack, requestOf } from "../stacks.server.ts";
 
 /**

@@ -3,9 +3,9 @@ import { createRoutesStub } from "react-router";
 import { SheetList } from "#app/components/sheet/SheetList.tsx";
 import { SheetPage } from "#app/components/sheet/SheetPage.tsx";
 import type { Paper } from "#app/lib/paper-size.ts";
-import { sheetView } from "#app/lib/sheet-view.ts";
 import { render, words } from "#tests/components/drawings/render.ts";
-import { demoResult, HEAD } from "#tests/fixtures/demo-assessment.ts";
+import { HEAD } from "#tests/fixtures/demo-assessment.ts";
+import { demoSheet } from "#tests/fixtures/sheet-documents.ts";
 
 function stub(Component: () => React.ReactNode): string {
   const Stub = createRoutesStub([{ path: "/", Component }]);
@@ -14,8 +14,16 @@ function stub(Component: () => React.ReactNode): string {
 
 /** The sheet as the server sends it. */
 function sheet(flow: string, paper: Paper = "a4"): string {
-  const view = sheetView(HEAD, demoResult(flow));
-  return stub(() => <SheetPage sheet={view} paper={paper} printedAt="2026-12-01T11:23:45.000Z" />);
+  const document = demoSheet(flow);
+  return stub(() => (
+    <SheetPage
+      assessmentId={HEAD.id}
+      document={document}
+      legs={null}
+      paper={paper}
+      printedAt="2026-12-01T11:23:45.000Z"
+    />
+  ));
 }
 
 const count = (markup: string, text: string) => markup.split(text).length - 1;
@@ -35,7 +43,7 @@ describe("the printed sheet", () => {
     const text = words(markup);
     for (const words of ["Steps 1 to 12", "Steps 13 to 15", "Steps 16 to 19", "Back side up", "Do not release: rolls"])
       expect(text).toContain(words);
-    expect(count(markup, "keep-whole border-b")).toBeGreaterThanOrEqual(3);
+    expect(count(markup, 'role="rowheader" aria-colspan="4"')).toBe(3);
   });
 
   it("says before the answer that a blocked flow must not be run", () => {
@@ -43,30 +51,40 @@ describe("the printed sheet", () => {
     expect(words(sheet("Petrel"))).not.toContain("Do not run");
   });
 
-  it("repeats number, draft, title block and page of pages on every page, and the table's head where it goes on", () => {
-    const text = words(sheet("Petrel"));
-    expect(text.match(/Draft, not released: not for the floor/g)).toHaveLength(2);
-    expect(text.match(/Title block/g)).toBeNull();
-    expect(text).toContain("Page 1 of 2");
-    expect(text).toContain("Page 2 of 2");
-    expect(count(sheet("Petrel"), "<thead")).toBe(1);
-    expect(text.match(/If a wafer breaks: stop/g)).toHaveLength(2);
+  it("repeats number, draft, title block and page of pages on every page, and the tables' heads where they stand", () => {
+    const markup = sheet("Petrel");
+    const text = words(markup);
+    for (const page of ["1 of 3", "2 of 3", "3 of 3"]) {
+      expect(text).toContain(`Page ${page}`);
+      expect(markup).toContain(`aria-label="Title block, page ${page}"`);
+    }
+    expect(text.match(/Draft, not released: not for the floor/g)?.length).toBeGreaterThanOrEqual(6);
+    expect(count(markup, 'aria-label="Steps grouped by what holds the wafer"')).toBe(1);
+    expect(count(markup, 'aria-label="Steps with their figures"')).toBe(1);
   });
 
   it("leaves room to write lot, wafers, carrier and tape, and whom to call", () => {
     const text = words(sheet("Petrel"));
-    for (const label of ["Lot", "Wafers", "Carrier number", "on since", "days at most", "Shift lead", "Process owner"])
+    for (const label of [
+      "Lot",
+      "Wafers",
+      "Carrier number",
+      "on since",
+      "days at most",
+      "Call the shift lead",
+      "process owner",
+    ])
       expect(text).toContain(label);
   });
 
   it("says that paper is uncontrolled, and when it was printed", () => {
-    expect(words(sheet("Tern"))).toContain("Uncontrolled when printed. Page 1 of 1. Printed 2026-12-01 11:23 UTC.");
+    expect(words(sheet("Tern"))).toContain("Uncontrolled when printed. Page 1 of 2 Printed 2026-12-01 11:23 UTC");
   });
 
   it("is made for the chosen paper", () => {
-    expect(sheet("Tern")).toContain("page-a4");
-    expect(sheet("Tern", "letter")).toContain("page-letter");
-    expect(sheet("Tern", "letter")).toContain("--width:215.9mm");
+    expect(sheet("Tern")).toContain("sheet-page-a4");
+    expect(sheet("Tern", "letter")).toContain("sheet-page-letter");
+    expect(sheet("Tern", "letter")).toContain("width:215.9mm");
   });
 
   it("paints with tokens only and has no pattern, which would print as blocks", () => {

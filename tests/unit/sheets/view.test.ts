@@ -1,6 +1,4 @@
 import { describe, expect, it } from "vitest";
-import { paperAskedFor } from "#app/lib/paper-size.ts";
-import { sheetPages } from "#app/lib/sheet-pages.ts";
 import { sheetView, type SheetView } from "#app/lib/sheet-view.ts";
 import { DEMO_FLOWS, demoResult, HEAD } from "#tests/fixtures/demo-assessment.ts";
 
@@ -103,35 +101,5 @@ describe("the page for hands", () => {
       status: "Draft",
       released: "not yet",
     });
-  });
-});
-
-describe("pages of a sheet", () => {
-  it("are one for the Tern flow on A4, and at most two for any demo flow on any paper", () => {
-    expect(sheetPages(view("Tern"), "a4")).toHaveLength(1);
-    for (const flow of DEMO_FLOWS)
-      for (const paper of ["a4", "letter"] as const)
-        expect(sheetPages(view(flow), paper).length).toBeLessThanOrEqual(2);
-  });
-
-  it("keep groups whole and in order, and put what follows them on the last page", () => {
-    const sheet = view("Petrel");
-    const many = { ...sheet, groups: Array.from({ length: 7 }, () => sheet.groups).flat() };
-    const pages = sheetPages(many, "letter");
-    expect(pages.length).toBeGreaterThan(3);
-    expect(pages.flatMap(({ groups }) => groups)).toEqual(many.groups);
-    expect(pages.map(({ foot }) => foot)).toEqual(pages.map((_, index) => index === pages.length - 1));
-    for (const { groups } of pages.slice(0, -1)) expect(groups.length).toBeGreaterThan(0);
-  });
-
-  it("end even when a single group is taller than a page", () => {
-    const sheet = view("Petrel");
-    const tall = sheet.groups.map((group) => ({ ...group, doNot: Array.from({ length: 90 }, () => "Do not") }));
-    expect(sheetPages({ ...sheet, groups: tall }, "a4").flatMap(({ groups }) => groups)).toHaveLength(3);
-  });
-
-  it("are of the paper that the address asks for, A4 for anything else", () => {
-    expect(paperAskedFor("letter")).toBe("letter");
-    for (const asked of [null, "", "A4", "a3", "../letter"]) expect(paperAskedFor(asked)).toBe("a4");
   });
 });

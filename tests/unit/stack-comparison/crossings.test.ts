@@ -2,15 +2,16 @@
 import { describe, expect, it } from "vitest";
 import { estimateStack } from "#app/engine/stack/estimate-stack.ts";
 import { withThickness } from "#app/engine/stack/model.ts";
-import { allCrossings, pairSentence } from "#app/lib/stack-comparison/crossing-words.ts";
-import { warpCrossings, warpCurve, type PairOfWarps } from "#app/lib/stack-comparison/crossings.ts";
-import type { ComparedStack } from "#app/lib/stack-comparison/figures.ts";
+import { allCrossings, pairSentence } from "#app/lib/comparison/crossing-words.ts";
+import { warpCrossings, type PairOfWarps } from "#app/lib/comparison/crossings.ts";
+import { stackCurves, type ComparedStack } from "#app/lib/stack-comparison/figures.ts";
 import { layer, RANGE, stack } from "./samples.ts";
 
 const plain = (text: string) => text.replaceAll("\u00A0", " ");
-const curveOf = ({ figures }: ComparedStack) => {
-  if (!figures) throw new Error("The sample can be estimated.");
-  return warpCurve(figures.stack);
+const curveOf = (sample: ComparedStack) => {
+  const [found] = stackCurves([sample]);
+  if (!found) throw new Error("The sample can be estimated.");
+  return found.curve;
 };
 const pair = (one: ComparedStack, other: ComparedStack) => warpCrossings(curveOf(one), curveOf(other), RANGE);
 const warpBy = ({ figures }: ComparedStack, thickness: number) =>
@@ -68,7 +69,7 @@ describe("crossings", () => {
   });
 
   it("have numbers that run through all pairs, with a sentence for each pair", () => {
-    const { marks, words } = allCrossings([thin, thick, stack("C", [layer({ MPa: 60 })])], RANGE);
+    const { marks, words } = allCrossings(stackCurves([thin, thick, stack("C", [layer({ MPa: 60 })])]), RANGE);
     expect(words.map(({ key }) => key)).toEqual(["AB", "AC", "BC"]);
     expect(marks.length).toBeGreaterThan(0);
     expect(marks.map(({ number }) => number)).toEqual(marks.map((_, n) => n + 1));

@@ -2,12 +2,13 @@
 import { describe, expect, it } from "vitest";
 import { estimateStack } from "#app/engine/stack/estimate-stack.ts";
 import { defaultLimits } from "#app/engine/rules/limits.ts";
-import { comparisonSearch, moved, readComparison } from "#app/lib/stack-comparison/asked.ts";
-import { comparedCurves, thicknessLines, warpLines } from "#app/lib/stack-comparison/chart.ts";
-import { comparisonPlot } from "#app/components/stacks/compare/comparison-plot.ts";
-import type { ComparisonChart } from "#app/schemas/stack-comparison.ts";
+import { comparisonSearch, moved, readComparison } from "#app/lib/comparison/asked.ts";
+import { thicknessLines, warpLines } from "#app/lib/comparison/limit-lines.ts";
+import { comparedCurves } from "#app/lib/stack-comparison/chart.ts";
+import { comparisonPlot } from "#app/components/comparison/comparison-plot.ts";
+import type { ComparisonChart } from "#app/schemas/comparison.ts";
 import { comparisonCsv } from "#app/lib/stack-comparison/csv.ts";
-import { comparedOver } from "#app/lib/stack-comparison/range.ts";
+import { comparedOver } from "#app/lib/stack-comparison/over.ts";
 import { sensitivityWords, warpMovers } from "#app/lib/stack-comparison/sensitivities.ts";
 import { layer, RANGE, stack } from "./samples.ts";
 

@@ -3,7 +3,7 @@ import { describe, expect, it } from "vitest";
 import { defaultLimits } from "#app/engine/rules/limits.ts";
 import { figureGroups } from "#app/lib/stack-comparison/figure-rows.ts";
 import { filmSlots } from "#app/lib/stack-comparison/film-slots.ts";
-import { onlyDifferences } from "#app/lib/stack-comparison/only-differences.ts";
+import { onlyDifferences } from "#app/lib/comparison/only-differences.ts";
 import { inputGroups } from "#app/lib/stack-comparison/rows.ts";
 import { layer, stack } from "./samples.ts";
 

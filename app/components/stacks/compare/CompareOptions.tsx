@@ -1,9 +1,10 @@
 import { Form, useNavigation } from "react-router";
 import { SelectField } from "#app/components/ui/SelectField.tsx";
 import { TextField } from "#app/components/ui/TextField.tsx";
-import { NO_TOOL } from "#app/lib/stack-comparison/asked.ts";
-import type { ComparedView, ComparisonView } from "#app/schemas/stack-comparison.ts";
-import { HiddenAsked } from "./HiddenAsked.tsx";
+import { NO_TOOL } from "#app/lib/comparison/asked.ts";
+import type { ComparisonFaults } from "#app/schemas/comparison.ts";
+import type { StackComparisonView } from "#app/schemas/stack-comparison.ts";
+import { HiddenAsked } from "#app/components/comparison/HiddenAsked.tsx";
 
 const OWN = ["at", "scale", "from", "to", "tool"] as const;
 const SCALES = [
@@ -12,7 +13,7 @@ const SCALES = [
 ];
 
 /** At which temperature, over which thickness and on which axes the stacks are compared: a form that puts it into the address. */
-export function CompareOptions({ view, faults }: { view: ComparisonView; faults: ComparedView["faults"] }) {
+export function CompareOptions({ view, faults }: { view: StackComparisonView; faults: ComparisonFaults }) {
   const { asked, tools } = view;
   const loading = useNavigation().state === "loading";
   return (
@@ -55,7 +56,7 @@ export function CompareOptions({ view, faults }: { view: ComparisonView; faults:
         error={faults.to}
         autoComplete="off"
       />
-      <SelectField name="scale" label="Axes" className="w-36" defaultValue={asked.scale} options={SCALES} />
+      <SelectField name="scale" label="Axes" className="w-36" defaultValue={asked.scale || "log"} options={SCALES} />
       <SelectField
         name="tool"
         label="Warp limits of"

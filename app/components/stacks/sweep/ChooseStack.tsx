@@ -2,10 +2,10 @@ import { Form, Link } from "react-router";
 import { PageHead } from "#app/components/layout/PageHead.tsx";
 import { EmptyState } from "#app/components/ui/EmptyState.tsx";
 import { SelectField } from "#app/components/ui/SelectField.tsx";
-import type { StackChoice } from "#app/schemas/stack-comparison.ts";
+import type { ComparisonChoice } from "#app/schemas/comparison.ts";
 
 /** Which stack is to be swept: for who comes from the search, and not from a stack. */
-export function ChooseStack({ stacks }: { stacks: readonly StackChoice[] }) {
+export function ChooseStack({ stacks }: { stacks: readonly ComparisonChoice[] }) {
   return (
     <>
       <PageHead title="Sweep a stack" crumbs={[{ name: "Stacks", path: "/stacks" }]} />

@@ -1,5 +1,5 @@
 import { PageHead } from "#app/components/layout/PageHead.tsx";
-import { ExportLinks } from "#app/components/stacks/compare/ExportLinks.tsx";
+import { ExportLinks } from "#app/components/comparison/ExportLinks.tsx";
 import { Notice } from "#app/components/ui/Notice.tsx";
 import { sweepSearch } from "#app/lib/stack-sweep/asked.ts";
 import type { SweepView } from "#app/schemas/stack-sweep.ts";

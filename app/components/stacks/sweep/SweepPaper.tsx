@@ -1,6 +1,6 @@
 import { noBreak } from "#app/components/drawings/no-break.ts";
-import { OnePage, PAGE_CELL } from "#app/components/stacks/compare/OnePage.tsx";
-import { PaperBar } from "#app/components/stacks/compare/PaperBar.tsx";
+import { OnePage, PAGE_CELL } from "#app/components/comparison/OnePage.tsx";
+import { PaperBar } from "#app/components/comparison/PaperBar.tsx";
 import { PAPERS, type Paper } from "#app/lib/paper-size.ts";
 import { answerOf } from "#app/lib/stack-sweep/answers.ts";
 import { sweepSearch } from "#app/lib/stack-sweep/asked.ts";

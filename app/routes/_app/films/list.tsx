@@ -2,6 +2,10 @@ import { Link } from "react-router";
 import { FILM_LIST } from "#app/components/films/film-list.tsx";
 import { LibraryList } from "#app/components/library/LibraryList.tsx";
 import { Notice } from "#app/components/ui/Notice.tsx";
+import { TickBar } from "#app/components/ui/ticks/TickBar.tsx";
+import { tickColumn } from "#app/components/ui/ticks/tick-column.tsx";
+import { useTicked } from "#app/components/ui/ticks/use-ticked.ts";
+import { MOST_TICKED } from "#app/lib/ticked-ids.ts";
 import { scopeOf } from "#app/server/contexts.server.ts";
 import { withinPages } from "#app/server/list-page.server.ts";
 import { listLibraryAt } from "#app/services/library/library.server.ts";
@@ -17,6 +21,15 @@ export async function loader({ context, url }: Route.LoaderArgs) {
 }
 
 export default function Films({ loaderData }: Route.ComponentProps) {
+  const ticks = useTicked("films-ticked");
+  const bar = (
+    <TickBar
+      ticks={ticks}
+      what={["film", "films"]}
+      onPage={loaderData.page.rows.map(({ id }) => id)}
+      actions={[{ label: "Download ticked as CSV", to: "/films/films.csv", file: true, most: MOST_TICKED }]}
+    />
+  );
   return (
     <>
       {loaderData.imported !== null && (
@@ -25,7 +38,12 @@ export default function Films({ loaderData }: Route.ComponentProps) {
           title={`${loaderData.imported === 1 ? "1 film is" : `${loaderData.imported} films are`} imported.`}
         />
       )}
-      <LibraryList view={FILM_LIST} {...loaderData} more={<TableOfFilms mayEdit={loaderData.mayEdit} />} />
+      <LibraryList
+        view={FILM_LIST}
+        {...loaderData}
+        more={<TableOfFilms mayEdit={loaderData.mayEdit} />}
+        ticks={{ column: tickColumn(ticks), bar }}
+      />
     </>
   );
 }

@@ -46,30 +46,31 @@ export default function FlowRoute({ loaderData: flow, actionData }: Route.Compon
         crumbs={[{ name: "Flows", path: "/flows" }]}
         remark={`${flow.program}. Last changed ${stamp.updatedAt.slice(0, 10)}, ${stamp.updatedBy}`}
         actions={
-          (mayEdit || mayAssess) && (
-            <>
-              {mayEdit && (
-                <>
-                  <Link to="edit" className="btn">
-                    Name and wafer
+          <>
+            <Link to={`/flows/compare?of=${flow.id}`} className="btn">
+              Compare
+            </Link>
+            {mayEdit && (
+              <>
+                <Link to="edit" className="btn">
+                  Name and wafer
+                </Link>
+                {flow.mayKeep && (
+                  <Link to="keep" className="btn">
+                    Keep as template
                   </Link>
-                  {flow.mayKeep && (
-                    <Link to="keep" className="btn">
-                      Keep as template
-                    </Link>
-                  )}
-                  <IntentForm intent="copy" busy="Copying" className="btn">
-                    Copy
-                  </IntentForm>
-                </>
-              )}
-              {mayAssess && (
-                <IntentForm intent="assess" busy="Assessing" className="btn btn-primary">
-                  Assess
+                )}
+                <IntentForm intent="copy" busy="Copying" className="btn">
+                  Copy
                 </IntentForm>
-              )}
-            </>
-          )
+              </>
+            )}
+            {mayAssess && (
+              <IntentForm intent="assess" busy="Assessing" className="btn btn-primary">
+                Assess
+              </IntentForm>
+            )}
+          </>
         }
       />
       {conflicted && (

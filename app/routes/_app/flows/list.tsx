@@ -5,9 +5,14 @@ import { DataTable, type Column } from "#app/components/ui/DataTable.tsx";
 import { EmptyState } from "#app/components/ui/EmptyState.tsx";
 import { FAVOURITES_ONLY } from "#app/components/kept/favourites-only.ts";
 import { ListHead } from "#app/components/ui/ListHead.tsx";
+import { TickBar } from "#app/components/ui/ticks/TickBar.tsx";
+import { tickColumn } from "#app/components/ui/ticks/tick-column.tsx";
+import { useTicked } from "#app/components/ui/ticks/use-ticked.ts";
+import { MOST_COMPARED } from "#app/lib/comparison/asked.ts";
 import { formatBare } from "#app/lib/format-measured.ts";
 import { revisionLetters } from "#app/lib/assessment-revision.ts";
 import { readListParams } from "#app/lib/list-params.ts";
+import { MOST_TICKED } from "#app/lib/ticked-ids.ts";
 import { programsWhere } from "#app/policies/permissions.ts";
 import { scopeOf } from "#app/server/contexts.server.ts";
 import { withinPages } from "#app/server/list-page.server.ts";
@@ -30,6 +35,7 @@ export async function loader({ context, url }: Route.LoaderArgs) {
       label: programName,
     })),
     mayEdit: programsWhere(scope.actor, "edit stacks and flows").length > 0,
+    mayAssess: programsWhere(scope.actor, "run assessments").length > 0,
   };
 }
 
@@ -75,7 +81,8 @@ const columns: Column<Row>[] = [
 ];
 
 export default function Flows({ loaderData }: Route.ComponentProps) {
-  const { page, programs, mayEdit } = loaderData;
+  const { page, programs, mayEdit, mayAssess } = loaderData;
+  const ticks = useTicked("flows-ticked");
   const searched = page.params.query !== "" || Object.values(page.params.filters).some(Boolean);
   const add = mayEdit && (
     <Link to="/flows/new" className="btn btn-primary">
@@ -110,7 +117,19 @@ export default function Flows({ loaderData }: Route.ComponentProps) {
         ]}
       />
       {page.rows.length > 0 ? (
-        <DataTable caption="Flows" columns={columns} page={page} rowKey={({ id }) => id} />
+        <>
+          <TickBar
+            ticks={ticks}
+            what={["flow", "flows"]}
+            onPage={page.rows.map(({ id }) => id)}
+            actions={[
+              { label: "Compare", to: "/flows/compare", least: 2, most: MOST_COMPARED },
+              ...(mayAssess ? [{ label: "Assess again", to: "/flows/assess", most: MOST_TICKED }] : []),
+              { label: "Mark as favourites", to: "/flows/mark", method: "post", most: MOST_TICKED },
+            ]}
+          />
+          <DataTable caption="Flows" columns={[tickColumn(ticks), ...columns]} page={page} rowKey={({ id }) => id} />
+        </>
       ) : (
         <EmptyState title={searched ? "No flow fits" : "No flows yet"} actions={!searched && add}>
           {searched

@@ -1,15 +1,17 @@
 import { Link } from "react-router";
 import { PageHead } from "#app/components/layout/PageHead.tsx";
-import { CompareTicked } from "#app/components/stacks/compare/CompareTicked.tsx";
-import { tickColumn } from "#app/components/stacks/compare/tick-column.tsx";
-import { useTicked } from "#app/components/stacks/compare/use-ticked.ts";
 import { exaggerationOf } from "#app/components/stacks/bow-of.ts";
 import { stackColumns } from "#app/components/stacks/stack-columns.tsx";
 import { DataTable } from "#app/components/ui/DataTable.tsx";
 import { EmptyState } from "#app/components/ui/EmptyState.tsx";
 import { FAVOURITES_ONLY } from "#app/components/kept/favourites-only.ts";
 import { ListHead } from "#app/components/ui/ListHead.tsx";
+import { TickBar } from "#app/components/ui/ticks/TickBar.tsx";
+import { tickColumn } from "#app/components/ui/ticks/tick-column.tsx";
+import { useTicked } from "#app/components/ui/ticks/use-ticked.ts";
+import { MOST_COMPARED } from "#app/lib/comparison/asked.ts";
 import { readListParams } from "#app/lib/list-params.ts";
+import { MOST_TICKED } from "#app/lib/ticked-ids.ts";
 import { programsWhere } from "#app/policies/permissions.ts";
 import { scopeOf } from "#app/server/contexts.server.ts";
 import { withinPages } from "#app/server/list-page.server.ts";
@@ -37,9 +39,15 @@ export async function loader({ context, url }: Route.LoaderArgs) {
   };
 }
 
+/** What may be done by whoever edits stacks; each asks once more. */
+const CHANGES = [
+  { label: "Duplicate", to: "/stacks/duplicate", most: MOST_TICKED },
+  { label: "Remove", to: "/stacks/remove", most: MOST_TICKED, removes: true },
+];
+
 export default function Stacks({ loaderData }: Route.ComponentProps) {
   const { page, flatWithin, programs, mayEdit } = loaderData;
-  const { ticked, read, clear } = useTicked();
+  const ticks = useTicked("stacks-ticked");
   const searched = page.params.query !== "" || Object.values(page.params.filters).some(Boolean);
   const wafers = page.rows.flatMap(({ answer, diameter }) => (answer ? [{ shape: answer.shape, diameter }] : []));
   const add = mayEdit && (
@@ -63,10 +71,18 @@ export default function Stacks({ loaderData }: Route.ComponentProps) {
       />
       {page.rows.length > 0 ? (
         <>
-          <CompareTicked ticked={ticked} onPage={page.rows.map(({ id }) => id)} onClear={clear} />
+          <TickBar
+            ticks={ticks}
+            what={["stack", "stacks"]}
+            onPage={page.rows.map(({ id }) => id)}
+            actions={[
+              { label: "Compare", to: "/stacks/compare", least: 2, most: MOST_COMPARED },
+              ...(mayEdit ? CHANGES : []),
+            ]}
+          />
           <DataTable
             caption="Stacks"
-            columns={[tickColumn(ticked, read), ...stackColumns(exaggerationOf(wafers), flatWithin)]}
+            columns={[tickColumn(ticks), ...stackColumns(exaggerationOf(wafers), flatWithin)]}
             page={page}
             rowKey={({ id }) => id}
           />

@@ -1,0 +1,46 @@
+import { lineStyle } from "#app/components/comparison/line-styles.ts";
+import { warpAxis } from "#app/components/comparison/warp-axis.ts";
+import { coursePlot } from "#app/components/drawings/course-plot.ts";
+import type { Plot, PlotPoint } from "#app/components/drawings/plot.ts";
+import { formatQuantity } from "#app/engine/units/format.ts";
+import { LEAST_DRAWN } from "#app/lib/stack-chart.ts";
+import type { StepsChart } from "#app/schemas/flow-comparison.ts";
+
+const micrometres = (metres: number) => formatQuantity(metres, "length", { unit: "µm", significant: 3, trim: true });
+
+/** Flows in one plot of warp along the aligned steps: with sign on a linear axis, sizes alone on a logarithmic one. */
+export function stepsPlot({ scale, places, lines, limits, rolled, crossings }: StepsChart): Plot {
+  const plot = coursePlot({
+    places,
+    lines: lines.map(({ letter, label, values }) => ({ id: letter, label, values, ...lineStyle(letter) })),
+    limits,
+    rolled: [],
+    formatWarp: micrometres,
+  });
+  const signed: Plot = {
+    ...plot,
+    shaded: rolled.map(({ from, to, label }) => ({ from: from - 0.5, to: to + 0.5, label })),
+    marks: crossings.map(({ x, y, number }) => ({ kind: "crossing", colourToken: "ink", x, y, text: String(number) })),
+  };
+  return scale === "linear" ? signed : sizesOf(signed);
+}
+
+/** The same plot by sizes alone, on a logarithmic axis. What is as good as flat has no place there. */
+function sizesOf(plot: Plot): Plot {
+  const size = ({ x, y }: PlotPoint) => ({ x, y: Math.abs(y) });
+  const series = plot.series.map((each) => {
+    const points = each.points.map(size).filter(({ y }) => y >= LEAST_DRAWN);
+    return { ...each, points, markersAt: points.map(({ x }) => x) };
+  });
+  const axis = warpAxis(
+    series.flatMap(({ points }) => points.map(({ y }) => y)),
+    "log",
+  );
+  return {
+    ...plot,
+    x: { ...plot.x, title: "Step; sizes alone, whichever way the edges lie" },
+    y: { scale: "log", ...axis, format: micrometres },
+    series,
+    marks: plot.marks?.map((mark) => ({ ...mark, ...size(mark) })),
+  };
+}

@@ -1,0 +1,27 @@
+import { FlowComparisonPaper } from "#app/components/flows/compare/FlowComparisonPaper.tsx";
+import { FLOWS } from "#app/lib/comparison/kinds.ts";
+import { paperAskedFor } from "#app/lib/paper-size.ts";
+import { scopeOf } from "#app/server/contexts.server.ts";
+import { wrongNumber } from "#app/services/comparison.server.ts";
+import { flowComparison } from "#app/services/flow-comparison/comparison.server.ts";
+import type { Route } from "./+types/flow-comparison";
+
+export const meta: Route.MetaFunction = () => [{ title: "Comparison of flows · Planeward" }];
+
+export async function loader({ context, url }: Route.LoaderArgs) {
+  const scope = scopeOf(context);
+  const { asked, members, compared } = await flowComparison(scope, url.searchParams);
+  if (!compared) throw wrongNumber(FLOWS);
+  return {
+    asked,
+    members,
+    compared,
+    paper: paperAskedFor(url.searchParams.get("paper")),
+    preparedBy: scope.actor.name,
+    printedAt: new Date().toISOString(),
+  };
+}
+
+export default function FlowComparisonPrint({ loaderData }: Route.ComponentProps) {
+  return <FlowComparisonPaper {...loaderData} />;
+}
