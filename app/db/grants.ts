@@ -17,11 +17,14 @@ const ADD_ONLY = [
   "sheet_comment",
   "sheet_print",
 ];
-<<<<<<< HEAD
-const NEVER_TAKEN_OUT = ["film_stress_value", "step_measurement", "sheet", "sheet_revision", "deviation"];
-=======
-const NEVER_TAKEN_OUT = ["film_stress_value", "step_measurement", "mail_outbox"];
->>>>>>> main
+const NEVER_TAKEN_OUT = [
+  "film_stress_value",
+  "step_measurement",
+  "mail_outbox",
+  "sheet",
+  "sheet_revision",
+  "deviation",
+];
 const READ_AND_WRITE = [
   "person",
   "credential",

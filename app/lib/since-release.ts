@@ -53,7 +53,9 @@ export function changesInLines(last: Half, now: Half, changes: readonly InputCha
   const gone = moved.filter(({ after }) => after === null).length;
   if (gone > 0) lines.push(`${gone === 1 ? "One step is" : `${gone} steps are`} no longer there.`);
   if (lines.length === 0) lines.push("The same steps and support as before.");
-  return lines.slice(0, MOST).map((line) => (line.length > LONGEST ? `${line.slice(0, LONGEST - 1).trimEnd()}…` : line));
+  return lines
+    .slice(0, MOST)
+    .map((line) => (line.length > LONGEST ? `${line.slice(0, LONGEST - 1).trimEnd()}…` : line));
 }
 
 /** The first few by name, the rest by their count. */

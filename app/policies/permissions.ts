@@ -8,7 +8,7 @@ export const PROGRAM_PERMISSIONS = {
   "accept stresses": ["engineer", "process owner"],
   "edit stacks and flows": ["engineer", "process owner"],
   "run assessments": ["engineer", "process owner"],
-<<<<<<< HEAD
+  "see the outbox": ["process owner", "administrator"],
   "ask for a review": ["engineer", "process owner"],
   "comment in a review": ["technician", "engineer", "process owner", "shift lead"],
   "record deviations": ["engineer", "process owner"],
@@ -17,9 +17,6 @@ export const PROGRAM_PERMISSIONS = {
   "work on the floor": ["technician", "engineer", "process owner", "shift lead"],
   "hold lots and clear stops of the shift": ["process owner", "shift lead"],
   "clear every stop": ["process owner"],
-=======
-  "see the outbox": ["process owner", "administrator"],
->>>>>>> main
 } as const satisfies Record<string, readonly (ProgramRole | SiteRole)[]>;
 
 /** Things done to what the whole site shares. A program role counts when it is held in any program. */

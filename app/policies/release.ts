@@ -29,7 +29,10 @@ export function releaseObstacles(personId: string, revision: ReleaseCase): Obsta
   const { state, askedBy, assessedBy, outOfDate, newer, unchanged, open } = revision;
   const found: Obstacle[] = [];
   if (state !== "in review")
-    found.push({ what: `This revision is ${state}, not in review.`, remedy: "Ask for a review of a newer assessment." });
+    found.push({
+      what: `This revision is ${state}, not in review.`,
+      remedy: "Ask for a review of a newer assessment.",
+    });
   if (personId === askedBy || personId === assessedBy)
     found.push({
       what: "It is your own work: you ran the assessment or asked for the review.",
@@ -53,7 +56,8 @@ export function releaseObstacles(personId: string, revision: ReleaseCase): Obsta
   if (open > 0)
     found.push({
       what: `${open === 1 ? "One finding blocks" : `${open} findings block`} the release and no deviation covers ${open === 1 ? "it" : "them"}.`,
-      remedy: "Change the flow, or record a deviation with reason, scope and expiry, and have it signed by a second person.",
+      remedy:
+        "Change the flow, or record a deviation with reason, scope and expiry, and have it signed by a second person.",
     });
   return found;
 }

@@ -19,7 +19,10 @@ const lastDay = z
 
 /** Everything that is said or done on the page of a review, told apart by `intent`. */
 export const reviewFormSchema = z.discriminatedUnion("intent", [
-  z.object({ intent: z.literal("ask"), note: z.string().trim().max(1000, "Keep it under 1000 characters.").default("") }),
+  z.object({
+    intent: z.literal("ask"),
+    note: z.string().trim().max(1000, "Keep it under 1000 characters.").default(""),
+  }),
   z.object({
     intent: z.literal("comment"),
     step: z

@@ -1,6 +1,7 @@
 import { defineEntity, p, type InferEntity } from "@mikro-orm/core";
 import type { SheetFormat, SheetPages } from "#app/schemas/sheet-revision.ts";
 import { Program } from "./program.ts";
+import type { Paper } from "#app/lib/paper-size.ts";
 import { SheetRevision } from "./sheet-revision.ts";
 
 /** A sheet as it was set once: a reprint sends these bytes. Only added. */
@@ -14,7 +15,7 @@ export const SheetFile = defineEntity({
     revision: () => p.manyToOne(SheetRevision),
     leg: p.integer(),
     format: p.text().$type<SheetFormat>(),
-    paper: p.text().$type<"A4" | "Letter">(),
+    paper: p.text().$type<Paper>(),
     pages: p.text().$type<SheetPages>(),
     /** the words across it, such as 'superseded by C'; empty on what was released */
     mark: p.text(),

@@ -19,11 +19,8 @@ import { Wafers } from "./2026-12-07-wafers.ts";
 import { Instruments } from "./2026-12-07-instruments.ts";
 import { FoundQuickly } from "./2026-12-08-found-quickly.ts";
 import { DemoComesAndGoes } from "./2026-12-09-demo-comes-and-goes.ts";
-<<<<<<< HEAD
-import { ReviewAndRelease } from "./2026-12-10-review-and-release.ts";
-=======
 import { Mail } from "./2026-12-10-mail.ts";
->>>>>>> main
+import { ReviewAndRelease } from "./2026-12-10-review-and-release.ts";
 
 /** Every migration in the order in which it runs. */
 export const migrations = [
@@ -48,9 +45,6 @@ export const migrations = [
   { name: "2026-12-07-step-measurements", class: StepMeasurements },
   { name: "2026-12-08-found-quickly", class: FoundQuickly },
   { name: "2026-12-09-demo-comes-and-goes", class: DemoComesAndGoes },
-<<<<<<< HEAD
-  { name: "2026-12-10-review-and-release", class: ReviewAndRelease },
-=======
   { name: "2026-12-10-mail", class: Mail },
->>>>>>> main
+  { name: "2026-12-10-review-and-release", class: ReviewAndRelease },
 ];

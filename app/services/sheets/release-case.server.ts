@@ -7,16 +7,14 @@ import { findAssessment } from "../assessments/assessments.server.ts";
 import { isOutOfDate } from "../assessments/out-of-date.server.ts";
 import { presentFlow } from "../assessments/present-inputs.server.ts";
 import { hasNewer } from "./ask-review.server.ts";
-import { fingerprints, type findRevision } from "./revision.server.ts";
-
-type Revision = Awaited<ReturnType<typeof findRevision>>;
+import { fingerprints, type FoundRevision } from "./revision.server.ts";
 
 /** Whether a deviation counts now: signed by a second person and not expired. */
 export const inForce = ({ signedAt, until }: Pick<Deviation, "signedAt" | "until">, now = new Date()): boolean =>
   signedAt !== null && signedAt !== undefined && until > now;
 
 /** What decides a release, with everything that it was decided from. */
-export async function releaseCaseOf(em: EntityManager, scope: ActorScope, revision: Revision) {
+export async function releaseCaseOf(em: EntityManager, scope: ActorScope, revision: FoundRevision) {
   const assessment = await findAssessment(em, scope, revision.assessment.id);
   const { input } = await presentFlow(em, scope, assessment.flow.id);
   const deviations = await em.find(

@@ -43,7 +43,10 @@ export async function recordDeviation(scope: ActorScope, revisionId: string, val
     const { result } = await findAssessment(em, scope, revision.assessment.id);
     const known = new Set(blockingFindings(result).map(({ key }) => key));
     if (values.findings.some((key) => !known.has(key)))
-      throw problem(409, "One of these findings does not block the release. Open the page again and tick those that do.");
+      throw problem(
+        409,
+        "One of these findings does not block the release. Open the page again and tick those that do.",
+      );
     em.create(Deviation, {
       id: randomUUID(),
       program: revision.program.id,
@@ -78,8 +81,10 @@ export async function signDeviation(scope: ActorScope, revisionId: string, { dev
 export async function returnRevision(scope: ActorScope, revisionId: string, { reason }: Values<"return">) {
   await inScope(scope, async (em) => {
     const revision = await findRevision(em, scope, revisionId);
-    const own = revision.askedBy.id === scope.actor.id && mayInProgram(scope.actor, "ask for a review", revision.program.id);
-    if (!own) requireInProgram(scope, "release, return and withdraw sheets", revision.program.id, "revision of a sheet");
+    const own =
+      revision.askedBy.id === scope.actor.id && mayInProgram(scope.actor, "ask for a review", revision.program.id);
+    if (!own)
+      requireInProgram(scope, "release, return and withdraw sheets", revision.program.id, "revision of a sheet");
     const { flow } = await findAssessment(em, scope, revision.assessment.id);
     await lockSheetOf(em, flow.id);
     await em.refresh(revision);

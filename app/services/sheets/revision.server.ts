@@ -29,6 +29,8 @@ export async function findRevision(
   return revision;
 }
 
+export type FoundRevision = Awaited<ReturnType<typeof findRevision>>;
+
 /** Waits until nobody else moves a revision of this flow's sheet, for the rest of the transaction. */
 export async function lockSheetOf(em: EntityManager, flowId: string): Promise<void> {
   await em.execute("select pg_advisory_xact_lock(hashtextextended(?, 0))", [`sheet of ${flowId}`]);
