@@ -83,6 +83,7 @@ export default [
       route("carriers.csv", "routes/_app/assessments/carriers-csv.ts"),
       route("lot", "routes/_app/assessments/lot.tsx"),
       route("measured", "routes/_app/assessments/measured.tsx"),
+      route("review", "routes/_app/assessments/review.tsx"),
     ]),
     ...prefix("carriers", [
       index("routes/_app/carriers/index.tsx"),

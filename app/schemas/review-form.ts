@@ -49,14 +49,6 @@ export const reviewFormSchema = z.discriminatedUnion("intent", [
   }),
 ]);
 export type ReviewForm = z.output<typeof reviewFormSchema>;
-export type ReviewIntent = ReviewForm["intent"];
-
-/** What the action answers when a form was not taken: which one, what is wrong by field, and what was typed. */
-export interface ReviewRefused {
-  intent: string;
-  errors: Record<string, string>;
-  typed: Record<string, string>;
-}
 
 export const withdrawSchema = z.object({
   intent: z.literal("withdraw"),

@@ -19,17 +19,9 @@ export async function askReview(scope: ActorScope, assessmentId: string | undefi
   await inScope(scope, async (em) => {
     const assessment = await findAssessment(em, scope, assessmentId);
     requireInProgram(scope, "ask for a review", assessment.program.id, "assessment");
-    if (assessment.lot)
-      throw problem(409, "A lot's own assessment is no revision. Ask for a review of the assessment that it is of.");
     await lockSheetOf(em, assessment.flow.id);
-    await refuseOld(em, scope, assessment);
-    const known = await em.findOne(SheetRevision, { assessment: assessment.id, state: { $ne: "returned" } });
-    if (known)
-      throw problem(409, `This assessment is ${known.state} already. Assess the flow again before asking once more.`);
+    await refuseReview(em, scope, assessment);
     const sheet = (await em.findOne(Sheet, { flow: assessment.flow.id })) ?? (await newSheet(em, scope, assessment));
-    const other = await em.findOne(SheetRevision, { sheet: sheet.id, state: "in review" });
-    if (other)
-      throw problem(409, "Another assessment of this flow is in review. It has to be returned or released first.");
     const revision = em.create(SheetRevision, {
       id: randomUUID(),
       program: assessment.program.id,
@@ -49,13 +41,22 @@ export async function askReview(scope: ActorScope, assessmentId: string | undefi
 
 type Found = Awaited<ReturnType<typeof findAssessment>>;
 
-async function refuseOld(em: EntityManager, scope: ActorScope, assessment: Found): Promise<void> {
+/** @throws 409 with the reason why no review of this assessment can be asked for now */
+export async function refuseReview(em: EntityManager, scope: ActorScope, assessment: Found): Promise<void> {
+  if (assessment.lot)
+    throw problem(409, "A lot's own assessment is no revision. Ask for a review of the assessment that it is of.");
   if (await hasNewer(em, assessment))
     throw problem(409, "The flow has been assessed again since. Ask for a review of its newest assessment.");
   const { input } = await presentFlow(em, scope, assessment.flow.id);
   const { engineVersion, inputHash } = assessment;
   if (isOutOfDate({ engineVersion, inputHash, input: assessment.input.$ }, input))
     throw problem(409, "This assessment is out of date. Run it again, and ask for a review of that one.");
+  const known = await em.findOne(SheetRevision, { assessment: assessment.id, state: { $ne: "returned" } });
+  if (known)
+    throw problem(409, `This assessment is ${known.state} already. Assess the flow again before asking once more.`);
+  const other = await em.findOne(SheetRevision, { sheet: { flow: assessment.flow.id }, state: "in review" });
+  if (other)
+    throw problem(409, "Another assessment of this flow is in review. It has to be returned or released first.");
 }
 
 /** Whether the flow has an assessment after this one. */

@@ -31,6 +31,16 @@ export async function findRevision(
 
 export type FoundRevision = Awaited<ReturnType<typeof findRevision>>;
 
+/** Id of the newest attempt to release an assessment; null when no review of it was asked for. */
+export async function newestRevisionOf(em: EntityManager, assessmentId: string): Promise<string | null> {
+  const [newest] = await em.find(
+    SheetRevision,
+    { assessment: assessmentId },
+    { orderBy: { askedAt: "desc", id: "desc" }, limit: 1, fields: ["id"] },
+  );
+  return newest?.id ?? null;
+}
+
 /** Waits until nobody else moves a revision of this flow's sheet, for the rest of the transaction. */
 export async function lockSheetOf(em: EntityManager, flowId: string): Promise<void> {
   await em.execute("select pg_advisory_xact_lock(hashtextextended(?, 0))", [`sheet of ${flowId}`]);

@@ -1,0 +1,141 @@
+import type { EntityManager } from "@mikro-orm/postgresql";
+import type { Deviation } from "#app/db/entities/deviation.ts";
+import { SheetComment } from "#app/db/entities/sheet-comment.ts";
+import { SheetRevision } from "#app/db/entities/sheet-revision.ts";
+import { Sheet } from "#app/db/entities/sheet.ts";
+import { assessmentNumber } from "#app/lib/assessment-number.ts";
+import { revisionLetters } from "#app/lib/assessment-revision.ts";
+import { blockingFindings } from "#app/lib/blocking-findings.ts";
+import { inputChanges } from "#app/lib/input-changes.ts";
+import { sheetNumber } from "#app/lib/sheet-number.ts";
+import { sinceRelease, type SinceRelease } from "#app/lib/since-release.ts";
+import { mayInProgram } from "#app/policies/permissions.ts";
+import { releaseObstacles } from "#app/policies/release.ts";
+import type { ReviewRevision, ReviewView } from "#app/schemas/review-view.ts";
+import { refusedSentence } from "#app/server/problem.server.ts";
+import { inScope, type ActorScope } from "#app/server/scope.server.ts";
+import { findAssessment } from "../assessments/assessments.server.ts";
+import { refuseReview } from "./ask-review.server.ts";
+import { inForce, releaseCaseOf } from "./release-case.server.ts";
+import { findRevision, newestRevisionOf } from "./revision.server.ts";
+
+type FoundAssessment = Awaited<ReturnType<typeof findAssessment>>;
+
+/** The review of an assessment, for the people of its program. @throws 404 for who may not see the work */
+export async function reviewPage(scope: ActorScope, assessmentId: string | undefined): Promise<ReviewView> {
+  return inScope(scope, async (em) => {
+    const assessment = await findAssessment(em, scope, assessmentId);
+    const { program, flow, result } = assessment;
+    const sheet = await em.findOne(Sheet, { flow: flow.id });
+    const newest = await newestRevisionOf(em, assessment.id);
+    const revision = newest === null ? null : await revisionView(em, scope, newest);
+    const may = (permission: Parameters<typeof mayInProgram>[1]) => mayInProgram(scope.actor, permission, program.id);
+    const inReview = revision?.state === "in review";
+    return {
+      assessment: {
+        id: assessment.id,
+        name: assessment.flowName,
+        number: assessmentNumber(program.slug, assessment.documentNumber),
+        letter: revisionLetters(assessment.number),
+        program: program.name,
+      },
+      sheet: sheet && sheetNumber(program.slug, sheet.number),
+      revision: revision?.view ?? null,
+      steps: result.steps.map(({ number, title }) => ({ number, title })),
+      blocking: blockingFindings(result),
+      assumed: result.assumed,
+      inputs: result.inputs,
+      since: sheet ? await sinceLast(em, scope, sheet, assessment) : null,
+      notAsked: inReview ? null : await whyNot(em, scope, assessment),
+      may: {
+        ask: may("ask for a review"),
+        comment: inReview && may("comment in a review"),
+        deviate: inReview && may("record deviations"),
+        return: inReview && (may("release, return and withdraw sheets") || revision.own),
+        release: inReview && may("release, return and withdraw sheets"),
+      },
+    };
+  });
+}
+
+async function revisionView(em: EntityManager, scope: ActorScope, id: string) {
+  const revision = await findRevision(em, scope, id);
+  const { releaseCase, deviations } = await releaseCaseOf(em, scope, revision);
+  const comments = await em.find(
+    SheetComment,
+    { revision: revision.id },
+    { populate: ["createdBy"], orderBy: { createdAt: "asc", id: "asc" } },
+  );
+  const view: ReviewRevision = {
+    id: revision.id,
+    state: revision.state,
+    note: revision.note,
+    askedAt: revision.askedAt.toISOString(),
+    askedBy: revision.askedBy.name,
+    decidedAt: revision.decidedAt?.toISOString() ?? null,
+    decidedBy: revision.decidedBy?.name ?? null,
+    reason: revision.reason ?? null,
+    letter: revision.number ? revisionLetters(revision.number) : null,
+    obstacles: revision.state === "in review" ? releaseObstacles(scope.actor.id, releaseCase) : [],
+    deviations: deviations.map((each) => deviationView(scope, revision, each)),
+    comments: comments.map(({ id: comment, step, text, createdAt, createdBy }) => ({
+      id: comment,
+      step: step ?? null,
+      text,
+      at: createdAt.toISOString(),
+      by: createdBy.name,
+    })),
+  };
+  return { view, state: revision.state, own: revision.askedBy.id === scope.actor.id };
+}
+
+function deviationView(
+  { actor }: ActorScope,
+  { state, program }: { state: string; program: { id: string } },
+  { id, findings, reason, scope, until, createdAt, createdBy, signedAt, signedBy }: Deviation,
+) {
+  const owner = mayInProgram(actor, "release, return and withdraw sheets", program.id);
+  return {
+    id,
+    findings,
+    reason,
+    scope,
+    until: until.toISOString(),
+    recordedAt: createdAt.toISOString(),
+    recordedBy: createdBy.name,
+    signedAt: signedAt?.toISOString() ?? null,
+    signedBy: signedBy?.name ?? null,
+    inForce: inForce({ signedAt, until }),
+    maySign: state === "in review" && !signedAt && owner && createdBy.id !== actor.id && until > new Date(),
+  };
+}
+
+/** What is different from the revision that was released last, other than from this assessment. */
+async function sinceLast(
+  em: EntityManager,
+  scope: ActorScope,
+  sheet: Sheet,
+  now: FoundAssessment,
+): Promise<SinceRelease | null> {
+  const [last] = await em.find(
+    SheetRevision,
+    { sheet: sheet.id, number: { $ne: null }, assessment: { $ne: now.id } },
+    { orderBy: { number: "desc" }, limit: 1 },
+  );
+  if (!last?.number) return null;
+  const before = await findAssessment(em, scope, last.assessment.id);
+  return sinceRelease(last.number, half(before), half(now), inputChanges(before.input.$, now.input.$));
+}
+
+const half = ({ id, engineVersion, result }: FoundAssessment) => ({ id, engineVersion, result });
+
+async function whyNot(em: EntityManager, scope: ActorScope, assessment: FoundAssessment): Promise<string | null> {
+  try {
+    await refuseReview(em, scope, assessment);
+    return null;
+  } catch (error) {
+    const sentence = refusedSentence(error);
+    if (sentence === null) throw error;
+    return sentence;
+  }
+}
