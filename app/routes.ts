@@ -5,6 +5,7 @@ export default [
   route("readyz", "routes/readyz.ts"),
   layout("routes/_public/layout.tsx", [
     route("sign-in", "routes/_public/sign-in.tsx"),
+    route("s/:token", "routes/_public/sheet-status.tsx"),
     route("unsubscribe/:token", "routes/_public/unsubscribe.tsx"),
   ]),
   route("sign-out", "routes/_auth/sign-out.ts"),
@@ -139,7 +140,15 @@ export default [
     route("search", "routes/_app/search.tsx"),
     route("search/found", "routes/_app/search-found.ts"),
     route("jobs", "routes/_app/jobs.tsx"),
-    route("sheets", "routes/_app/sheets/list.tsx"),
+    ...prefix("sheets", [
+      index("routes/_app/sheets/list.tsx"),
+      route("drafts", "routes/_app/sheets/drafts.tsx"),
+      ...prefix("revisions/:revisionId", [
+        index("routes/_app/sheets/revision.tsx"),
+        route("read", "routes/_app/sheets/read.ts"),
+        route("sheet.pdf", "routes/_app/sheets/pdf.ts"),
+      ]),
+    ]),
     route("method", "routes/_app/method.tsx"),
     route("*", "routes/_app/nowhere.tsx"),
   ]),

@@ -55,6 +55,7 @@ const WITHIN: (Page & { open: (actor: Actor) => boolean })[] = [
   { name: "Flow templates", path: "/flows/library/flows", open: seesLibrary },
   { name: "Step library", path: "/flows/library/steps", open: seesLibrary },
   { name: "What would change?", path: "/assessments/change-request", also: "change request", open: seesWork },
+  { name: "Draft sheets", path: "/sheets/drafts", also: "print a draft", open: seesWork },
   { name: "Lots", path: "/lots", also: "wafers", open: seesWork },
   { name: "Import scans", path: "/scans/import", also: "upload files", open: mayUpload },
   { name: "Upload one pair of scans", path: "/scans/new", open: mayUpload },

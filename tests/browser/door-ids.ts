@@ -22,6 +22,7 @@ export const WALLED: readonly string[] = [
   "waferId",
   "waferScanId",
   "lotId",
+  "revisionId",
 ];
 
 type Query = <Row>(sql: string, params?: unknown[]) => Promise<Row[]>;
@@ -126,9 +127,15 @@ export async function ternIds(engineer: APIRequestContext): Promise<DoorIds> {
     ),
     lotId: await idOf(query, "select id from lot where name = 'L-door'"),
   }));
+  await engineer.post(`/assessments/${assessmentId}/review`, { form: { intent: "ask" } });
+  const revisionId = await asOwner((query) =>
+    idOf(query, "select id from sheet_revision where assessment_id = ?", [assessmentId]),
+  );
   return {
     ...known,
     ...placed,
+    revisionId,
+    token: "of-no-sheet-whatsoever",
     assessmentId,
     scanId,
     fileId,
@@ -161,6 +168,13 @@ export function strangeIds(own: DoorIds): Promise<DoorIds> {
     const fileId = await copy("scan_file", own["fileId"]);
     const readingId = await copy("scan_reading", own["readingId"], { file_id: fileId });
     const lotId = await copy("lot", own["lotId"]);
+    const assessmentId = await copy("assessment", own["assessmentId"], { flow_id: flowId });
+    const sheetId = await idOf(
+      query,
+      `insert into sheet (id, program_id, flow_id, number, created_at, created_by_id)
+         select gen_random_uuid(), program_id, flow_id, 1, created_at, created_by_id from assessment where id = ? returning id`,
+      [assessmentId],
+    );
     const wafer = await idOf(
       query,
       `insert into wafer (id, program_id, lot_id, name, created_at, created_by_id)
@@ -172,7 +186,8 @@ export function strangeIds(own: DoorIds): Promise<DoorIds> {
       flowId,
       fileId,
       stepId: await copy("flow_step", own["stepId"], { flow_id: flowId }),
-      assessmentId: await copy("assessment", own["assessmentId"], { flow_id: flowId }),
+      assessmentId,
+      revisionId: await copy("sheet_revision", own["revisionId"], { sheet_id: sheetId, assessment_id: assessmentId }),
       stackId: await copy("stack", own["stackId"]),
       readingId,
       lotId,

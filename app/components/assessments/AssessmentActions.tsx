@@ -38,6 +38,11 @@ export function AssessmentActions({ head, leg = null, phone = false }: Props) {
           Compare
         </Link>
       )}
+      {phone || lot ? null : (
+        <Link to={`/assessments/${head.id}/review`} className="btn">
+          Review
+        </Link>
+      )}
       {mayAssess && !outOfDate && !phone ? <RunAgain /> : null}
       <Link
         to={`/sheets/${head.id}${legQuery("?", leg)}`}

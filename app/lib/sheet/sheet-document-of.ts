@@ -6,6 +6,7 @@ import type { SheetDocument, SheetHands } from "#app/schemas/sheet-document.ts";
 import type { AssessmentHead } from "../assessment-view.ts";
 import { CAUTIONS } from "../cautions.ts";
 import { sheetView, type SheetView } from "../sheet-view.ts";
+import { endedNotice, markWords, statusWord } from "./revision-words.ts";
 import { codePath } from "./qr-path.ts";
 import { engineersPart } from "./engineers-part.ts";
 import type { SheetFacts } from "./sheet-facts.ts";
@@ -44,7 +45,7 @@ export function sheetDocumentOf(source: SheetSource, facts: SheetFacts): SheetDo
     format: 1,
     language: "en",
     name: `Handling-risk sheet ${titleBlock.number}${revision}`,
-    mark: markOf(release),
+    mark: release ? markWords(release) : "Draft, not for the floor",
     diameter: view.diameter,
     titleBlock,
     status: release && {
@@ -63,21 +64,6 @@ export function sheetDocumentOf(source: SheetSource, facts: SheetFacts): SheetDo
 /** The same without what engineers read: what a guest of the program may have. */
 export function handsOnly(document: SheetDocument): SheetDocument {
   return { ...document, engineers: null };
-}
-
-type Release = NonNullable<SheetFacts["release"]>;
-
-function statusWord({ status, supersededBy }: Release): string {
-  if (status === "released") return "Released";
-  if (status === "withdrawn") return "Withdrawn";
-  return supersededBy ? `Superseded by ${supersededBy}` : "Superseded";
-}
-
-function markOf(release: SheetFacts["release"]): string | null {
-  if (!release) return "Draft, not for the floor";
-  if (release.status === "released") return null;
-  if (release.status === "withdrawn") return "withdrawn";
-  return release.supersededBy ? `superseded by ${release.supersededBy}` : "superseded";
 }
 
 function handsPart(view: SheetView, facts: SheetFacts): SheetHands {
@@ -113,8 +99,8 @@ function handsPart(view: SheetView, facts: SheetFacts): SheetHands {
 function notices(view: SheetView, release: SheetFacts["release"]): string[] {
   const found: string[] = [];
   if (!release) found.push(DRAFT_NOTICE);
-  if (release?.status === "superseded") found.push(`${statusWord(release)}: do not work from this paper`);
-  if (release?.status === "withdrawn") found.push("Withdrawn: do not work from this paper");
+  const ended = release && endedNotice(release);
+  if (ended) found.push(ended);
   if (view.legs) found.push(`For ${view.legs.chosen.slots} alone: the other slots have sheets of their own`);
   // What a released revision was made from is settled: only a draft asks to be assessed again.
   if (!release && view.changedSince !== null)

@@ -1,6 +1,6 @@
 import { describe, expect, it } from "vitest";
 import { createRoutesStub } from "react-router";
-import { SheetList } from "#app/components/sheet/SheetList.tsx";
+import { DraftList } from "#app/components/sheet/DraftList.tsx";
 import { SheetPage } from "#app/components/sheet/SheetPage.tsx";
 import type { Paper } from "#app/lib/paper-size.ts";
 import { render, words } from "#tests/components/drawings/render.ts";
@@ -102,16 +102,9 @@ describe("the printed sheet", () => {
 describe("the list of sheets", () => {
   const page = { rows: [], total: 0, params: { query: "", sort: "run", descending: false, page: 1, filters: {} } };
 
-  it("tells a guest that nothing is released yet, and nothing else", () => {
-    const text = words(stub(() => <SheetList page={null} programs={[]} />));
-    expect(text).toBe(
-      "Planeward Uncontrolled when printed Sheets Method: glossary No sheet has been released to you yet Handling-risk sheets of your programs appear here once they are checked and released.",
-    );
-  });
-
   it("tells an empty place from a search that finds nothing", () => {
-    expect(words(stub(() => <SheetList page={page} programs={[]} />))).toContain("No sheet yet");
+    expect(words(stub(() => <DraftList page={page} programs={[]} />))).toContain("No draft yet");
     const searched = { ...page, params: { ...page.params, query: "zzz" } };
-    expect(words(stub(() => <SheetList page={searched} programs={[]} />))).toContain("No sheet fits");
+    expect(words(stub(() => <DraftList page={searched} programs={[]} />))).toContain("No draft fits");
   });
 });

@@ -50,23 +50,15 @@ const columns: Column<AssessmentRow>[] = [
 
 const outcomeOptions = OUTCOMES.map((outcome) => ({ value: outcome, label: OUTCOME_SIGNS[outcome].word }));
 
-/** What can be printed: the newest assessment of each flow. A guest, who sees none of them, is told what will stand here. */
-export function SheetList({ page, programs }: { page: ListPage<AssessmentRow> | null; programs: readonly Option[] }) {
-  if (page === null)
-    return (
-      <>
-        <PageHead title="Sheets" />
-        <EmptyState title="No sheet has been released to you yet">
-          Handling-risk sheets of your programs appear here once they are checked and released.
-        </EmptyState>
-      </>
-    );
+/** Drafts to print: the newest assessment of each flow. */
+export function DraftList({ page, programs }: { page: ListPage<AssessmentRow>; programs: readonly Option[] }) {
   const searched = page.params.query !== "" || Object.values(page.params.filters).some(Boolean);
   return (
     <>
       <PageHead
-        title="Sheets"
-        remark={`${page.total} ${searched ? "found" : "to print"}, all drafts: none is released`}
+        title="Draft sheets"
+        crumbs={[{ name: "Sheets", path: "/sheets" }]}
+        remark={`${page.total} ${searched ? "found" : "to print"}: the newest assessment of each flow, not for the floor`}
         actions={
           <Link to="/assessments/change-request" className="btn">
             What would change?
@@ -81,10 +73,10 @@ export function SheetList({ page, programs }: { page: ListPage<AssessmentRow> | 
         ]}
       />
       {page.rows.length > 0 ? (
-        <DataTable caption="Sheets to print" columns={columns} page={page} rowKey={({ id }) => id} />
+        <DataTable caption="Drafts to print" columns={columns} page={page} rowKey={({ id }) => id} />
       ) : (
         <EmptyState
-          title={searched ? "No sheet fits" : "No sheet yet"}
+          title={searched ? "No draft fits" : "No draft yet"}
           actions={
             searched ? null : (
               <Link to="/flows" className="btn btn-primary">
