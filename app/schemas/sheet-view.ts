@@ -36,7 +36,8 @@ export interface RevisionView {
   title: string;
   program: string;
   releasedAt: string;
-  releasedBy: string;
+  /** null for a guest, who reads on the paper who released it */
+  releasedBy: string | null;
   remark: string;
   changes: string[];
   supersededBy: { letter: string; id: string } | null;

@@ -73,7 +73,7 @@ test.describe("an engineer", () => {
 
   test("finds what can be printed by search, filter and sort, all in the address", async ({ page }) => {
     await assessTern(page);
-    await page.goto("/sheets");
+    await page.goto("/sheets/drafts");
     await page.getByLabel("Search flows").fill("to 100");
     await page.getByLabel("Program").selectOption("tern");
     await page.getByRole("button", { name: "Show" }).click();
@@ -86,8 +86,8 @@ test.describe("an engineer", () => {
     await expectNoAxeFindings(page);
     await row.getByRole("link", { name: `Print the sheet of ${TERN}` }).click();
     await expect(page).toHaveURL(/\/sheets\/[0-9a-f-]+$/);
-    await page.goto("/sheets?q=12+parsecs");
-    await expect(page.getByRole("heading", { name: "No sheet fits" })).toBeVisible();
+    await page.goto("/sheets/drafts?q=12+parsecs");
+    await expect(page.getByRole("heading", { name: "No draft fits" })).toBeVisible();
   });
 
   test("opens it without scripts, and is told how to print", async ({ page, browser }) => {

@@ -23,15 +23,11 @@ const PROGRAM_TABLE: Record<keyof typeof PROGRAM_PERMISSIONS, string> = {
   "accept stresses": "    - - - y y -",
   "edit stacks and flows": "- - - y y -",
   "run assessments": "    - - - y y -",
+  "see the outbox": "     - - - - y y",
   "ask for a review": "   - - - y y -",
   "comment in a review": "- y y y y -",
   "record deviations": "  - - - y y -",
   "release, return and withdraw sheets": "- - - - y -",
-  "assign sheets to lots": "- y y y y -",
-  "work on the floor": "  - y y y y -",
-  "hold lots and clear stops of the shift": "- - y - y -",
-  "clear every stop": "   - - - - y -",
-  "see the outbox": "     - - - - y y",
 };
 const SITE_TABLE: Record<keyof typeof SITE_PERMISSIONS, string> = {
   "see the library": "    - y y y y y",

@@ -3,14 +3,14 @@ import type { EntityManager } from "@mikro-orm/postgresql";
 import type { Assessment } from "#app/db/entities/assessment.ts";
 import { SheetRevision } from "#app/db/entities/sheet-revision.ts";
 import { canonicalJson } from "#app/lib/canonical-json.ts";
-import type { ProgramPermission } from "#app/policies/permissions.ts";
+import { mayInProgram, type ProgramPermission } from "#app/policies/permissions.ts";
 import { notFound } from "#app/server/problem.server.ts";
 import type { ActorScope } from "#app/server/scope.server.ts";
 import { requireInProgram } from "../permission.server.ts";
 import { idFrom } from "../uuid.server.ts";
 
 /**
- * The revision that an id names, with its sheet and the people of it.
+ * The revision that an id names, with its sheet and, for its staff, the people of it.
  * @throws 404 for one that is not there or of a foreign program, 403 for a role that may not
  */
 export async function findRevision(
@@ -22,10 +22,13 @@ export async function findRevision(
   const revision = await em.findOne(
     SheetRevision,
     { id: idFrom(id, "revision of a sheet") },
-    { populate: ["sheet", "program", "askedBy", "decidedBy", "endedBy"] },
+    { populate: ["sheet", "program"] },
   );
   if (!revision) throw notFound("revision of a sheet");
   requireInProgram(scope, permission, revision.program.id, "revision of a sheet");
+  // A guest may not see who the people are; asked for together with them, the revision itself would be missing.
+  if (mayInProgram(scope.actor, "see the work", revision.program.id))
+    await em.populate(revision, ["askedBy", "decidedBy", "endedBy"]);
   return revision;
 }
 

@@ -51,7 +51,7 @@ export function RevisionPage({ view, answer }: Props) {
         </ReviewSection>
         <ReviewSection title="Release">
           <p>
-            Released by {releasedBy} at {minuteOf(releasedAt)}.{remark && ` “${remark}”`}
+            Released{releasedBy !== null && ` by ${releasedBy}`} at {minuteOf(releasedAt)}.{remark && ` “${remark}”`}
           </p>
           {changes.length > 0 && (
             <ul className="mt-2 list-disc pl-5">
