@@ -21,9 +21,9 @@ function ownStacks(mark: string, ...names: string[]): Promise<Made[]> {
     for (const which of names) {
       const name = `${which} ${mark}`;
       const [stack] = await query<{ id: string }>(
-        `with origin as (select * from stack where name = 'Tern T-2, one redistribution layer')
-         insert into stack select (jsonb_populate_record(o, jsonb_build_object('id', gen_random_uuid(), 'name', ?::text))).*
-           from origin o returning id`,
+        `insert into stack
+         select (jsonb_populate_record(s, jsonb_build_object('id', gen_random_uuid(), 'name', ?::text))).*
+           from stack s where s.name = 'Tern T-2, one redistribution layer' returning id`,
         [name],
       );
       await query(

@@ -5,7 +5,7 @@ import { PageHead } from "#app/components/layout/PageHead.tsx";
 import { EmptyState } from "#app/components/ui/EmptyState.tsx";
 import { Notice } from "#app/components/ui/Notice.tsx";
 import { TickedTable } from "#app/components/ui/ticks/TickedTable.tsx";
-import { countOf, some, type TickedRows } from "#app/lib/ticked-rows.ts";
+import { countOf, some, withLeft, type TickedRows } from "#app/lib/ticked-rows.ts";
 
 interface Props {
   title: string;
@@ -48,7 +48,7 @@ export function TickedPage({ title, what, list, asked, done, did, children, butt
             kind={countOf(done, "left") + done.hidden > 0 ? "caution" : "done"}
             title={`${did}: ${some(countOf(done, "done"), what)}.`}
           />
-          <TickedTable caption="What was done" head="What happened" what={what} {...done} />
+          <TickedTable caption="What was done" head="What happened" what={what} {...withLeft(done, asked)} />
           <div className="mt-4">{back}</div>
         </>
       ) : asked.rows.length === 0 ? (
