@@ -8,7 +8,12 @@ import { stampOf, touch } from "./record.server.ts";
 
 const EDIT = "edit site settings";
 
-const theRow = (em: EntityManager) => em.findOneOrFail(SiteSetting, {}, { populate: ["updatedBy"] });
+async function theRow(em: EntityManager, lockMode: LockMode.NONE | LockMode.PESSIMISTIC_WRITE = LockMode.NONE) {
+  const [row] = await em.findAll(SiteSetting, { lockMode });
+  if (!row) throw new Error("the row of the site's settings, which a migration puts in, is gone");
+  await em.populate(row, ["updatedBy"]);
+  return row;
+}
 
 /** What holds for the whole site, with who changed it last. */
 export async function siteSettings(scope: ActorScope) {
@@ -22,7 +27,7 @@ export async function siteSettings(scope: ActorScope) {
 /** The paper that an address asks for, and the site's where it asks for none. Everybody who is signed in may print. */
 export async function paperFor(scope: ActorScope, url: URL): Promise<Paper> {
   const asked = paperAskedFor(url.searchParams.get("paper"));
-  return asked ?? (await inScope(scope, theRow)).paper;
+  return asked ?? (await inScope(scope, (em) => theRow(em))).paper;
 }
 
 /** `refused`: somebody else has changed it since; `version` is that of theirs, to send along when the person saves over it. */
@@ -35,10 +40,9 @@ export async function saveSiteSettings(
 ): Promise<SettingsSaved> {
   requireOnSite(scope, EDIT);
   return inScope(scope, async (em): Promise<SettingsSaved> => {
-    const row = await em.findOneOrFail(SiteSetting, {}, { lockMode: LockMode.PESSIMISTIC_WRITE });
+    const row = await theRow(em, LockMode.PESSIMISTIC_WRITE);
     if (row.paper === paper) return { outcome: "saved" };
     if (row.version !== version) {
-      await em.populate(row, ["updatedBy"]);
       const { updatedBy, updatedAt } = stampOf(row);
       const at = updatedAt.slice(0, 16).replace("T", " ");
       const reason = `${updatedBy} set the paper to ${PAPERS[row.paper].name} at ${at} UTC, after you had opened this page. Save again to put yours in its place.`;
