@@ -56,7 +56,7 @@ test("an engineer tries a lot by its mean, then wafer by wafer, and keeps it", a
   await expectNoAxeFindings(page);
 
   await page.getByRole("link", { name: "Print the sheet" }).first().click();
-  await expect(page.getByRole("main")).toContainText(`for lot ${lot} alone`);
+  await expect(page.getByRole("main")).toContainText(`Lot ${lot}Wafers`);
 
   await page.goto(path);
   await page.getByRole("navigation", { name: "Path" }).getByRole("link").last().click();

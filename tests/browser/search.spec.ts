@@ -44,7 +44,7 @@ test("arrows go round, Escape leaves, and nothing found says what to try", async
   await expect(options.last()).toBeInViewport();
   await expect(chosen).toHaveCount(1);
   await field(page).fill("no such thing");
-  await expect(page.getByRole("status")).toHaveText(
+  await expect(page.getByRole("dialog").getByRole("status")).toHaveText(
     "Nothing is called “no such thing”; try fewer letters, or one word alone.",
   );
   await page.keyboard.press("Escape");

@@ -21,6 +21,7 @@ import { FoundQuickly } from "./2026-12-08-found-quickly.ts";
 import { DemoComesAndGoes } from "./2026-12-09-demo-comes-and-goes.ts";
 import { Mail } from "./2026-12-10-mail.ts";
 import { ReviewAndRelease } from "./2026-12-10-review-and-release.ts";
+import { SiteSetting } from "./2026-12-11-site-setting.ts";
 
 /** Every migration in the order in which it runs. */
 export const migrations = [
@@ -47,4 +48,5 @@ export const migrations = [
   { name: "2026-12-09-demo-comes-and-goes", class: DemoComesAndGoes },
   { name: "2026-12-10-mail", class: Mail },
   { name: "2026-12-10-review-and-release", class: ReviewAndRelease },
+  { name: "2026-12-11-site-setting", class: SiteSetting },
 ];

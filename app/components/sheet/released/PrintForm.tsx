@@ -1,6 +1,6 @@
 import { SelectField } from "#app/components/ui/SelectField.tsx";
 import { TextField } from "#app/components/ui/TextField.tsx";
-import { PAPERS } from "#app/lib/paper-size.ts";
+import { PAPERS, type Paper } from "#app/lib/paper-size.ts";
 import { sheetPath } from "#app/lib/sheet-path.ts";
 import type { RevisionView } from "#app/schemas/sheet-view.ts";
 
@@ -10,7 +10,7 @@ const PAGES = [
 ];
 
 /** Takes the stored PDF out, and notes for which place. A plain form: what comes back is the file. */
-export function PrintForm({ view: { id, papers, staff } }: { view: RevisionView }) {
+export function PrintForm({ view: { id, papers, staff }, paper }: { view: RevisionView; paper: Paper }) {
   return (
     <form method="post" action={`${sheetPath(id)}/sheet.pdf`} className="flex max-w-160 flex-wrap items-end gap-3">
       {papers.length > 1 && (
@@ -23,6 +23,7 @@ export function PrintForm({ view: { id, papers, staff } }: { view: RevisionView 
       <SelectField
         name="paper"
         label="Paper"
+        defaultValue={paper}
         options={Object.entries(PAPERS).map(([value, { name }]) => ({ value, label: name }))}
       />
       {staff ? (

@@ -5,6 +5,7 @@ import { PageHead } from "#app/components/layout/PageHead.tsx";
 import { ReviewSection } from "#app/components/review/ReviewSection.tsx";
 import { Notice } from "#app/components/ui/Notice.tsx";
 import { minuteOf } from "#app/lib/minute-of.ts";
+import type { Paper } from "#app/lib/paper-size.ts";
 import { readPath } from "#app/lib/sheet-path.ts";
 import type { RevisionView } from "#app/schemas/sheet-view.ts";
 import { PrintForm } from "./PrintForm.tsx";
@@ -13,11 +14,13 @@ import { WithdrawForm } from "./WithdrawForm.tsx";
 
 interface Props {
   view: RevisionView;
+  /** what the site prints on */
+  paper: Paper;
   answer: SubmissionResult<string[]> | null | undefined;
 }
 
 /** A released revision: whether it is in force, its papers, who took them out, and its other revisions. */
-export function RevisionPage({ view, answer }: Props) {
+export function RevisionPage({ view, paper, answer }: Props) {
   const { id, sheet, letter, state, title, program, releasedAt, releasedBy, remark, changes, papers, staff } = view;
   return (
     <>
@@ -47,7 +50,7 @@ export function RevisionPage({ view, answer }: Props) {
           </ul>
         </ReviewSection>
         <ReviewSection title="Print" remark="the stored PDF, the same each time">
-          <PrintForm view={view} />
+          <PrintForm view={view} paper={paper} />
         </ReviewSection>
         <ReviewSection title="Release">
           <p>

@@ -1,5 +1,5 @@
-import { paperAskedFor } from "#app/lib/paper-size.ts";
 import { scopeOf } from "#app/server/contexts.server.ts";
+import { paperFor } from "#app/services/site-settings.server.ts";
 import { storedSheet } from "#app/services/sheets/sheet-file.server.ts";
 import type { Route } from "./+types/read";
 
@@ -16,9 +16,10 @@ const POLICY = [
 
 /** The stored HTML of a sheet, as it was released. */
 export async function loader({ context, params, url }: Route.LoaderArgs) {
-  const { bytes } = await storedSheet(scopeOf(context), params.revisionId, {
+  const scope = scopeOf(context);
+  const { bytes } = await storedSheet(scope, params.revisionId, {
     format: "html",
-    paper: paperAskedFor(url.searchParams.get("paper")),
+    paper: await paperFor(scope, url),
     pages: url.searchParams.get("pages") === "hands" ? "hands" : "all",
     leg: legAsked(url.searchParams.get("leg")),
   });

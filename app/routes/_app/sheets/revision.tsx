@@ -4,6 +4,7 @@ import { withdrawSchema } from "#app/schemas/review-form.ts";
 import { scopeOf } from "#app/server/contexts.server.ts";
 import { readForm } from "#app/server/form.server.ts";
 import { revisionPage } from "#app/services/sheets/revision-page.server.ts";
+import { paperFor } from "#app/services/site-settings.server.ts";
 import { withdrawRevision } from "#app/services/sheets/withdraw.server.ts";
 import type { Route } from "./+types/revision";
 
@@ -11,8 +12,9 @@ export const meta: Route.MetaFunction = ({ loaderData }) => [
   { title: `${loaderData ? `${loaderData.view.sheet} ${loaderData.view.letter}` : "Sheet"} · Planeward` },
 ];
 
-export async function loader({ context, params }: Route.LoaderArgs) {
-  return { view: await revisionPage(scopeOf(context), params.revisionId) };
+export async function loader({ context, params, url }: Route.LoaderArgs) {
+  const scope = scopeOf(context);
+  return { view: await revisionPage(scope, params.revisionId), paper: await paperFor(scope, url) };
 }
 
 export async function action({ request, context, params }: Route.ActionArgs) {
@@ -23,5 +25,5 @@ export async function action({ request, context, params }: Route.ActionArgs) {
 }
 
 export default function Revision({ loaderData, actionData }: Route.ComponentProps) {
-  return <RevisionPage view={loaderData.view} answer={actionData} />;
+  return <RevisionPage {...loaderData} answer={actionData} />;
 }
