@@ -8,7 +8,7 @@ export function WithdrawForm({ answer }: { answer: SubmissionResult<string[]> | 
   const [form, { reason }] = useRecordForm<{ reason: string }>({ id: "withdraw", lastResult: answer });
   const waiting = useNavigation().state === "submitting";
   return (
-    <details open={answer != null}>
+    <details open={answer !== null && answer !== undefined}>
       <summary className="link w-fit cursor-pointer">Withdraw this revision</summary>
       <Form method="post" {...getFormProps(form)} className="mt-3 max-w-160 space-y-2">
         <p>
