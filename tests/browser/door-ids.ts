@@ -129,7 +129,11 @@ export async function ternIds(engineer: APIRequestContext): Promise<DoorIds> {
   }));
   await engineer.post(`/assessments/${assessmentId}/review`, { form: { intent: "ask" } });
   const revisionId = await asOwner((query) =>
-    idOf(query, "select id from sheet_revision where assessment_id = ?", [assessmentId]),
+    idOf(
+      query,
+      "select r.id from sheet_revision r join sheet s on s.id = r.sheet_id where s.flow_id = ? order by r.asked_at desc",
+      [known.flowId],
+    ),
   );
   return {
     ...known,

@@ -132,7 +132,7 @@ const DOORS: Record<string, string> = {
   "/sheets/drafts": "302 403 200 200 200 200 403",
   "/sheets/revisions/:revisionId": "302 404 302 302 302 302 404",
   "/sheets/revisions/:revisionId/read": "302 404 404 404 404 404 404",
-  "/sheets/revisions/:revisionId/sheet.pdf": "302 302 302 302 302 302 302",
+  "/sheets/revisions/:revisionId/sheet.pdf": "302 404 302 302 302 302 404",
   "/assessments/:assessmentId/review": "302 404 200 200 200 200 404",
   "/method": "302 200 200 200 200 200 200",
   "/*": "302 404 404 404 404 404 404",

@@ -16,7 +16,7 @@ test("an engineer asks, the process owner releases, the technician takes the pap
   await press(page, "Ask for a review");
   await expect(page.getByText("asked for a review at")).toBeVisible();
   await page.getByLabel("About").selectOption({ index: 3 });
-  await page.getByLabel("Comment").fill("Cure checked on a monitor");
+  await page.getByRole("textbox", { name: "Comment" }).fill("Cure checked on a monitor");
   await press(page, "Say it");
   await expect(page.getByText("Cure checked on a monitor")).toBeVisible();
 

@@ -1,15 +1,18 @@
+import { redirect } from "react-router";
 import { attachment } from "#app/lib/content-disposition.ts";
+import { sheetPath } from "#app/lib/sheet-path.ts";
 import { printFormSchema } from "#app/schemas/sheet-view.ts";
 import { scopeOf } from "#app/server/contexts.server.ts";
 import { readForm } from "#app/server/form.server.ts";
 import { problem } from "#app/server/problem.server.ts";
+import { revisionPage } from "#app/services/sheets/revision-page.server.ts";
 import { printSheet } from "#app/services/sheets/sheet-file.server.ts";
-import { redirect } from "react-router";
 import type { Route } from "./+types/pdf";
 
 /** A paper is taken out by the form of its page, which says for which place. */
-export function loader({ params }: Route.LoaderArgs) {
-  throw redirect(`/sheets/revisions/${params.revisionId}`);
+export async function loader({ context, params }: Route.LoaderArgs) {
+  const { id } = await revisionPage(scopeOf(context), params.revisionId);
+  throw redirect(sheetPath(id));
 }
 
 /** The stored PDF, and an entry of who took it out. */
