@@ -1,3 +1,4 @@
+import { Link } from "react-router";
 import { KeptSections } from "#app/components/kept/KeptSections.tsx";
 import { EmptyState } from "#app/components/ui/EmptyState.tsx";
 import type { TodayView } from "#app/schemas/today.ts";
@@ -16,11 +17,18 @@ export function TodayForGuest({ view }: { view: TodayView }) {
     );
   return (
     <>
-      <TodayHead sentence="No sheet has been released to you yet." now={now} />
+      <TodayHead sentence="What is released to you stands under Sheets." now={now} />
       <div className="grid gap-x-12 gap-y-6 wide:grid-cols-[minmax(0,1fr)_384px]">
-        <EmptyState title="Handling-risk sheets">
-          A sheet says at which steps a wafer of your program needs support, and what must not happen to it. It shows
-          here and under Sheets as soon as the process owner has released it to you.
+        <EmptyState
+          title="Handling-risk sheets"
+          actions={
+            <Link to="/sheets" className="btn btn-primary">
+              Go to the sheets
+            </Link>
+          }
+        >
+          A sheet says at which steps a wafer of your program needs support, and what must not happen to it. It stands
+          under Sheets as soon as the process owner has released it, and only as long as it is in force.
         </EmptyState>
         <div className="space-y-6">
           <KeptSections groups={view.kept} />

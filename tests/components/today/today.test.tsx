@@ -100,9 +100,9 @@ describe("Today", () => {
       );
   });
 
-  it("shows a guest programs and no counts, and says that nothing is released", () => {
+  it("shows a guest programs and no counts, and where sheets stand", () => {
     const guest = text({ ...EMPTY, works: false, mayAssess: false, mayUpload: false });
-    expect(guest).toMatch(/^Today No sheet has been released to you yet\./);
+    expect(guest).toMatch(/^Today What is released to you stands under Sheets\./);
     expect(guest).toMatch(/Tern To 100 µm 200 mm/);
     expect(guest).not.toMatch(/Flows|Stacks|scan/);
   });
