@@ -126,7 +126,11 @@ test.describe("an engineer", () => {
     const name = await page.getByRole("heading", { level: 1 }).innerText();
     await expect(page.getByRole("link", { name: "make a flow from it" })).toBeVisible();
     await page.goto(`${path}/keep`);
-    await page.getByLabel("Keep it as").selectOption({ label: `In place of ‘${name}’` });
+    const kept = page.getByLabel("Keep it as");
+    await kept.selectOption(template.split("/").at(-1) ?? "");
+    await expect(kept.locator("option:checked")).toContainText(
+      /^In place of ‘Tern T-2, to 100\s*\S*\s*µm on tape, copy/,
+    );
     await press(page, "Keep");
     await expect(page.getByRole("alert")).toContainText(`Replace the steps of ‘${name}’`);
     await press(page, "Replace its steps");
