@@ -5,10 +5,9 @@ import { Sheet } from "#app/db/entities/sheet.ts";
 import { problem } from "#app/server/problem.server.ts";
 import { inScope, type ActorScope } from "#app/server/scope.server.ts";
 import { findAssessment } from "../assessments/assessments.server.ts";
-import { isOutOfDate } from "../assessments/out-of-date.server.ts";
-import { presentFlow } from "../assessments/present-inputs.server.ts";
 import { requireInProgram } from "../permission.server.ts";
 import { fingerprints, lockSheetOf } from "./revision.server.ts";
+import { hasNewer, restsOnOldInputs, type FoundAssessment } from "./still-newest.server.ts";
 import { tellReviewAsked } from "./tell.server.ts";
 
 /**
@@ -20,7 +19,8 @@ export async function askReview(scope: ActorScope, assessmentId: string | undefi
     const assessment = await findAssessment(em, scope, assessmentId);
     requireInProgram(scope, "ask for a review", assessment.program.id, "assessment");
     await lockSheetOf(em, assessment.flow.id);
-    await refuseReview(em, scope, assessment);
+    const obstacle = await whyNoReview(em, scope, assessment);
+    if (obstacle !== null) throw problem(409, obstacle);
     const sheet = (await em.findOne(Sheet, { flow: assessment.flow.id })) ?? (await newSheet(em, scope, assessment));
     const revision = em.create(SheetRevision, {
       id: randomUUID(),
@@ -39,36 +39,24 @@ export async function askReview(scope: ActorScope, assessmentId: string | undefi
   });
 }
 
-type Found = Awaited<ReturnType<typeof findAssessment>>;
-
-/** @throws 409 with the reason why no review of this assessment can be asked for now */
-export async function refuseReview(em: EntityManager, scope: ActorScope, assessment: Found): Promise<void> {
-  if (assessment.lot)
-    throw problem(409, "A lot's own assessment is no revision. Ask for a review of the assessment that it is of.");
+/** Why no review of this assessment can be asked for now, and what to do; null when it can. */
+export async function whyNoReview(
+  em: EntityManager,
+  scope: ActorScope,
+  assessment: FoundAssessment,
+): Promise<string | null> {
+  if (assessment.lot) return "A lot's own assessment is no revision. Ask for a review of the assessment that it is of.";
   if (await hasNewer(em, assessment))
-    throw problem(409, "The flow has been assessed again since. Ask for a review of its newest assessment.");
-  const { input } = await presentFlow(em, scope, assessment.flow.id);
-  const { engineVersion, inputHash } = assessment;
-  if (isOutOfDate({ engineVersion, inputHash, input: assessment.input.$ }, input))
-    throw problem(409, "This assessment is out of date. Run it again, and ask for a review of that one.");
+    return "The flow has been assessed again since. Ask for a review of its newest assessment.";
+  if (await restsOnOldInputs(em, scope, assessment))
+    return "This assessment is out of date. Run it again, and ask for a review of that one.";
   const known = await em.findOne(SheetRevision, { assessment: assessment.id, state: { $ne: "returned" } });
-  if (known)
-    throw problem(409, `This assessment is ${known.state} already. Assess the flow again before asking once more.`);
+  if (known) return `This assessment is ${known.state} already. Assess the flow again before asking once more.`;
   const other = await em.findOne(SheetRevision, { sheet: { flow: assessment.flow.id }, state: "in review" });
-  if (other)
-    throw problem(409, "Another assessment of this flow is in review. It has to be returned or released first.");
+  return other && "Another assessment of this flow is in review. It has to be returned or released first.";
 }
 
-/** Whether the flow has an assessment after this one. */
-export async function hasNewer(em: EntityManager, { flow, number }: Pick<Found, "flow" | "number">): Promise<boolean> {
-  const [newest] = await em.execute<{ number: number }[]>(
-    "select max(number) as number from assessment where flow_id = ? and lot is null",
-    [flow.id],
-  );
-  return (newest?.number ?? 0) > number;
-}
-
-async function newSheet(em: EntityManager, scope: ActorScope, { program, flow }: Found): Promise<Sheet> {
+async function newSheet(em: EntityManager, scope: ActorScope, { program, flow }: FoundAssessment): Promise<Sheet> {
   await em.execute("select pg_advisory_xact_lock(hashtextextended(?, 0))", [`sheet numbers of ${program.id}`]);
   const [last] = await em.execute<{ number: number | null }[]>(
     "select max(number) as number from sheet where program_id = ?",

@@ -1,13 +1,11 @@
 import type { EntityManager } from "@mikro-orm/postgresql";
 import { Deviation } from "#app/db/entities/deviation.ts";
-import { blockingFindings, type BlockingFinding } from "#app/lib/blocking-findings.ts";
+import { blockingFindings } from "#app/lib/blocking-findings.ts";
 import type { ReleaseCase } from "#app/policies/release.ts";
 import type { ActorScope } from "#app/server/scope.server.ts";
 import { findAssessment } from "../assessments/assessments.server.ts";
-import { isOutOfDate } from "../assessments/out-of-date.server.ts";
-import { presentFlow } from "../assessments/present-inputs.server.ts";
-import { hasNewer } from "./ask-review.server.ts";
 import { fingerprints, type FoundRevision } from "./revision.server.ts";
+import { hasNewer, restsOnOldInputs } from "./still-newest.server.ts";
 
 /** Whether a deviation counts now: signed by a second person and not expired. */
 export const inForce = ({ signedAt, until }: Pick<Deviation, "signedAt" | "until">, now = new Date()): boolean =>
@@ -16,7 +14,6 @@ export const inForce = ({ signedAt, until }: Pick<Deviation, "signedAt" | "until
 /** What decides a release, with everything that it was decided from. */
 export async function releaseCaseOf(em: EntityManager, scope: ActorScope, revision: FoundRevision) {
   const assessment = await findAssessment(em, scope, revision.assessment.id);
-  const { input } = await presentFlow(em, scope, assessment.flow.id);
   const deviations = await em.find(
     Deviation,
     { revision: revision.id },
@@ -24,19 +21,15 @@ export async function releaseCaseOf(em: EntityManager, scope: ActorScope, revisi
   );
   const covered = new Set(deviations.filter((each) => inForce(each)).flatMap(({ findings }) => findings));
   const blocking = blockingFindings(assessment.result);
-  const open: BlockingFinding[] = blocking.filter(({ key }) => !covered.has(key));
   const { inputHash, resultHash } = fingerprints(assessment);
   const releaseCase: ReleaseCase = {
     state: revision.state,
     askedBy: revision.askedBy.id,
     assessedBy: assessment.createdBy.id,
-    outOfDate: isOutOfDate(
-      { engineVersion: assessment.engineVersion, inputHash: assessment.inputHash, input: assessment.input.$ },
-      input,
-    ),
+    outOfDate: await restsOnOldInputs(em, scope, assessment),
     newer: await hasNewer(em, assessment),
     unchanged: inputHash === revision.inputHash && resultHash === revision.resultHash,
-    open: open.length,
+    open: blocking.filter(({ key }) => !covered.has(key)).length,
   };
-  return { releaseCase, assessment, deviations, blocking, open };
+  return { releaseCase, assessment, deviations, blocking };
 }

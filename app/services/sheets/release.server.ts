@@ -1,11 +1,9 @@
 import { createHash, randomBytes, randomUUID } from "node:crypto";
 import type { EntityManager } from "@mikro-orm/postgresql";
-import { Assessment } from "#app/db/entities/assessment.ts";
 import { SheetDocument } from "#app/db/entities/sheet-document.ts";
 import { SheetFile } from "#app/db/entities/sheet-file.ts";
 import { SheetRevision } from "#app/db/entities/sheet-revision.ts";
 import { revisionLetters } from "#app/lib/assessment-revision.ts";
-import { inputChanges } from "#app/lib/input-changes.ts";
 import { minuteOf } from "#app/lib/minute-of.ts";
 import { sheetDocumentOf } from "#app/lib/sheet/sheet-document-of.ts";
 import { sheetNumber } from "#app/lib/sheet-number.ts";
@@ -15,9 +13,9 @@ import { releaseObstacles } from "#app/policies/release.ts";
 import type { SheetDocument as Document } from "#app/schemas/sheet-document.ts";
 import { problem } from "#app/server/problem.server.ts";
 import { inScope, type ActorScope } from "#app/server/scope.server.ts";
-import { findAssessment } from "../assessments/assessments.server.ts";
+import { lastReleased } from "./last-released.server.ts";
 import { inForce, releaseCaseOf } from "./release-case.server.ts";
-import { findRevision, lockSheetOf, type FoundRevision } from "./revision.server.ts";
+import { findRevision, lockedRevision, type FoundRevision } from "./revision.server.ts";
 import { setSheet, type SetFile } from "./set-sheet.server.ts";
 import { sheetSourceOf } from "./sheet-source.server.ts";
 import { tellReleased } from "./tell.server.ts";
@@ -64,7 +62,7 @@ async function prepare(
   const at = new Date();
   const token = randomBytes(16).toString("base64url");
   const number = (last?.number ?? 0) + 1;
-  const changes = last ? await changesSince(em, scope, last, assessment) : [];
+  const changes = last ? changesInLines(last.before, assessment, last.changes) : [];
   const release = {
     number: sheetNumber(revision.program.slug, revision.sheet.number),
     revision: revisionLetters(number),
@@ -92,16 +90,12 @@ async function standing(em: EntityManager, scope: ActorScope, revision: FoundRev
   const obstacles = releaseObstacles(scope.actor.id, releaseCase);
   if (obstacles.length > 0) throw problem(409, obstacles.map(({ what, remedy }) => `${what} ${remedy}`).join(" "));
   await em.populate(assessment, ["createdBy"]);
-  const [last] = await em.find(
-    SheetRevision,
-    { sheet: revision.sheet.id, number: { $ne: null } },
-    { orderBy: { number: "desc" }, limit: 1 },
-  );
+  const last = await lastReleased(em, scope, revision.sheet.id, assessment);
   const valid = deviations.filter((each) => inForce(each));
   const titles = new Map(blocking.map(({ key, step, title }) => [key, `step ${step}, ${title.toLowerCase()}`]));
   return {
     assessment,
-    last: last ?? null,
+    last,
     basis: [last?.id ?? "first", ...valid.map(({ id }) => id)].join(" "),
     deviations: valid.map(({ findings, reason, scope: within, until }) => ({
       text: `Deviation for ${findings.map((key) => titles.get(key) ?? key).join("; ")}: ${withoutStop(reason)}`,
@@ -113,21 +107,6 @@ async function standing(em: EntityManager, scope: ActorScope, revision: FoundRev
 
 const withoutStop = (text: string) => text.replace(/[.\s]+$/, "");
 
-/** What differs from the last revision that was released, whatever became of it since; at most three lines. */
-async function changesSince(
-  em: EntityManager,
-  scope: ActorScope,
-  last: SheetRevision,
-  now: FoundAssessment,
-): Promise<string[]> {
-  const before = await findAssessment(em, scope, last.assessment.id);
-  return changesInLines(half(before), half(now), inputChanges(before.input.$, now.input.$));
-}
-
-type FoundAssessment = Awaited<ReturnType<typeof findAssessment>>;
-
-const half = ({ id, engineVersion, result }: FoundAssessment) => ({ id, engineVersion, result });
-
 async function commit(
   em: EntityManager,
   scope: ActorScope,
@@ -136,10 +115,7 @@ async function commit(
   { at, token, number, changes, basis, documents }: Prepared,
   files: readonly (SetFile & { leg: number })[],
 ): Promise<void> {
-  const revision = await findRevision(em, scope, revisionId, RELEASE);
-  const { flow } = await em.findOneOrFail(Assessment, revision.assessment.id);
-  await lockSheetOf(em, flow.id);
-  await em.refresh(revision, { populate: ["sheet", "program", "askedBy"] });
+  const revision = await lockedRevision(em, scope, revisionId, RELEASE);
   if ((await standing(em, scope, revision)).basis !== basis)
     throw problem(409, "A deviation or another release came in between. Look at the page again, then release.");
   const former = await em.findOne(

@@ -1,25 +1,21 @@
 import type { EntityManager } from "@mikro-orm/postgresql";
 import type { Deviation } from "#app/db/entities/deviation.ts";
 import { SheetComment } from "#app/db/entities/sheet-comment.ts";
-import { SheetRevision } from "#app/db/entities/sheet-revision.ts";
 import { Sheet } from "#app/db/entities/sheet.ts";
 import { assessmentNumber } from "#app/lib/assessment-number.ts";
 import { revisionLetters } from "#app/lib/assessment-revision.ts";
 import { blockingFindings } from "#app/lib/blocking-findings.ts";
-import { inputChanges } from "#app/lib/input-changes.ts";
 import { sheetNumber } from "#app/lib/sheet-number.ts";
-import { sinceRelease, type SinceRelease } from "#app/lib/since-release.ts";
+import { sinceRelease } from "#app/lib/since-release.ts";
 import { mayInProgram } from "#app/policies/permissions.ts";
 import { releaseObstacles } from "#app/policies/release.ts";
 import type { ReviewRevision, ReviewView } from "#app/schemas/review-view.ts";
-import { refusedSentence } from "#app/server/problem.server.ts";
 import { inScope, type ActorScope } from "#app/server/scope.server.ts";
 import { findAssessment } from "../assessments/assessments.server.ts";
-import { refuseReview } from "./ask-review.server.ts";
+import { whyNoReview } from "./ask-review.server.ts";
+import { lastReleased } from "./last-released.server.ts";
 import { inForce, releaseCaseOf } from "./release-case.server.ts";
 import { findRevision, newestRevisionOf } from "./revision.server.ts";
-
-type FoundAssessment = Awaited<ReturnType<typeof findAssessment>>;
 
 /** The review of an assessment, for the people of its program. @throws 404 for who may not see the work */
 export async function reviewPage(scope: ActorScope, assessmentId: string | undefined): Promise<ReviewView> {
@@ -27,6 +23,7 @@ export async function reviewPage(scope: ActorScope, assessmentId: string | undef
     const assessment = await findAssessment(em, scope, assessmentId);
     const { program, flow, result } = assessment;
     const sheet = await em.findOne(Sheet, { flow: flow.id });
+    const last = sheet && (await lastReleased(em, scope, sheet.id, assessment));
     const newest = await newestRevisionOf(em, assessment.id);
     const revision = newest === null ? null : await revisionView(em, scope, newest);
     const may = (permission: Parameters<typeof mayInProgram>[1]) => mayInProgram(scope.actor, permission, program.id);
@@ -45,8 +42,8 @@ export async function reviewPage(scope: ActorScope, assessmentId: string | undef
       blocking: blockingFindings(result),
       assumed: result.assumed,
       inputs: result.inputs,
-      since: sheet ? await sinceLast(em, scope, sheet, assessment) : null,
-      notAsked: inReview ? null : await whyNot(em, scope, assessment),
+      since: last && sinceRelease(last.number, last.before, assessment, last.changes),
+      notAsked: inReview ? null : await whyNoReview(em, scope, assessment),
       may: {
         ask: may("ask for a review"),
         comment: inReview && may("comment in a review"),
@@ -108,34 +105,4 @@ function deviationView(
     inForce: inForce({ signedAt, until }),
     maySign: state === "in review" && !signedAt && owner && createdBy.id !== actor.id && until > new Date(),
   };
-}
-
-/** What is different from the revision that was released last, other than from this assessment. */
-async function sinceLast(
-  em: EntityManager,
-  scope: ActorScope,
-  sheet: Sheet,
-  now: FoundAssessment,
-): Promise<SinceRelease | null> {
-  const [last] = await em.find(
-    SheetRevision,
-    { sheet: sheet.id, number: { $ne: null }, assessment: { $ne: now.id } },
-    { orderBy: { number: "desc" }, limit: 1 },
-  );
-  if (!last?.number) return null;
-  const before = await findAssessment(em, scope, last.assessment.id);
-  return sinceRelease(last.number, half(before), half(now), inputChanges(before.input.$, now.input.$));
-}
-
-const half = ({ id, engineVersion, result }: FoundAssessment) => ({ id, engineVersion, result });
-
-async function whyNot(em: EntityManager, scope: ActorScope, assessment: FoundAssessment): Promise<string | null> {
-  try {
-    await refuseReview(em, scope, assessment);
-    return null;
-  } catch (error) {
-    const sentence = refusedSentence(error);
-    if (sentence === null) throw error;
-    return sentence;
-  }
 }

@@ -1,15 +1,16 @@
 import type { EntityManager } from "@mikro-orm/postgresql";
 import { redirect } from "react-router";
 import { Deviation } from "#app/db/entities/deviation.ts";
-import { SheetDocument } from "#app/db/entities/sheet-document.ts";
 import { SheetFile } from "#app/db/entities/sheet-file.ts";
 import { SheetPrint } from "#app/db/entities/sheet-print.ts";
 import { SheetRevision } from "#app/db/entities/sheet-revision.ts";
+import { slotsInWords } from "#app/engine/flow/legs.ts";
 import { revisionLetters } from "#app/lib/assessment-revision.ts";
 import { sheetNumber } from "#app/lib/sheet-number.ts";
 import { mayInProgram } from "#app/policies/permissions.ts";
 import type { RevisionView } from "#app/schemas/sheet-view.ts";
 import { inScope, type ActorScope } from "#app/server/scope.server.ts";
+import { findAssessment } from "../assessments/assessments.server.ts";
 import { findRevision, type FoundRevision } from "./revision.server.ts";
 import { standingOf } from "./sheet-file.server.ts";
 
@@ -39,7 +40,7 @@ export async function revisionPage(scope: ActorScope, revisionId: string | undef
       endedAt: endedAt?.toISOString() ?? null,
       endedBy: staff ? (endedBy?.name ?? null) : null,
       endReason: revision.endReason ?? null,
-      papers: await papersOf(em, id, staff),
+      papers: await papersOf(em, scope, revision, staff),
       deviations: staff ? await deviationsOf(em, id) : [],
       staff: staff ? await forStaff(em, scope, revision) : null,
     };
@@ -55,15 +56,19 @@ async function successor(
   return next && { letter: revisionLetters(supersededBy), id: next.id };
 }
 
-/** The papers of a revision, by the slots that each says it is for. */
-async function papersOf(em: EntityManager, id: string, staff: boolean): Promise<RevisionView["papers"]> {
+/** The papers of a revision, by their slots; what a guest may see of an assessment is on the paper alone. */
+async function papersOf(
+  em: EntityManager,
+  scope: ActorScope,
+  { id, assessment }: FoundRevision,
+  staff: boolean,
+): Promise<RevisionView["papers"]> {
   const files = await em.find(SheetFile, { revision: id, mark: "" }, { fields: ["leg"], orderBy: { leg: "asc" } });
-  const legs = [...new Set(files.map(({ leg }) => leg))];
-  const documents = staff && legs.length > 1 ? await em.find(SheetDocument, { revision: id }) : [];
-  const notices = new Map(documents.map(({ leg, document }) => [leg, document.hands.notices]));
-  return legs.map((leg) => {
-    const slots = notices.get(leg)?.find((notice) => notice.includes("slots have sheets of their own"));
-    return { leg, name: slots?.split(" alone")[0]?.replace(/^For /, "") ?? (leg === 0 ? "All slots" : `Sheet ${leg}`) };
+  const numbers = [...new Set(files.map(({ leg }) => leg))];
+  const legs = staff && numbers.length > 1 ? (await findAssessment(em, scope, assessment.id)).result.legs : undefined;
+  return numbers.map((leg) => {
+    const slots = legs?.[leg - 1]?.slots;
+    return { leg, name: slots ? slotsInWords(slots) : leg === 0 ? "all slots" : `part ${leg}` };
   });
 }
 

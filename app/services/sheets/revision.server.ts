@@ -49,6 +49,21 @@ export async function lockSheetOf(em: EntityManager, flowId: string): Promise<vo
   await em.execute("select pg_advisory_xact_lock(hashtextextended(?, 0))", [`sheet of ${flowId}`]);
 }
 
+/** The same revision as it stands once nobody else can move it any more: every deed begins with this. */
+export async function lockedRevision(
+  em: EntityManager,
+  scope: ActorScope,
+  id: string | undefined,
+  permission?: ProgramPermission,
+): Promise<FoundRevision> {
+  const [of] = await em.execute<{ flow_id: string }[]>(
+    "select s.flow_id from sheet_revision r join sheet s on s.id = r.sheet_id where r.id = ?",
+    [idFrom(id, "revision of a sheet")],
+  );
+  if (of) await lockSheetOf(em, of.flow_id);
+  return findRevision(em, scope, id, permission);
+}
+
 const sha256 = (value: unknown) => createHash("sha256").update(canonicalJson(value)).digest("hex");
 
 /** What a review is bound to: fingerprints of an assessment's inputs and results as they are stored. */

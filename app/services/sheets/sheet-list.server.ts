@@ -10,7 +10,7 @@ import { escapeLike } from "../like.server.ts";
 import { requireInSomeProgram } from "../permission.server.ts";
 import { programFilter } from "../program-filter.server.ts";
 
-export const SHEET_SORTS = ["sheet", "flow", "date"] as const;
+export const SHEET_SORTS = ["state", "sheet", "flow", "date"] as const;
 
 /** A page of the revisions of sheets that the person may see; of their own programs a guest gets those that are released. */
 export async function listSheets(scope: ActorScope, params: ListParams): Promise<ListPage<SheetRow>> {
@@ -56,12 +56,13 @@ function namedLike(query: string) {
   return { sheet: { number: Number(number), program: { slug: slug.toLowerCase() } } };
 }
 
-/** What waits for somebody first, then what is in force, then what has ended; the newest of each first. */
+/** By default what waits for somebody first, then what is in force, then what has ended; the newest of each first. */
 function orderOf({ sort, descending }: ListParams): QueryOrderMap<SheetRevision>[] {
   const direction = descending ? "desc" : "asc";
   if (sort === "flow") return [{ title: direction }];
   if (sort === "sheet") return [{ program: { slug: direction } }, { sheet: { number: direction } }, { number: "desc" }];
-  if (sort === "date" && descending) return [{ askedAt: "asc" }];
+  if (sort === "date") return [{ [raw((alias) => `coalesce(${alias}.decided_at, ${alias}.asked_at)`)]: direction }];
   const words = ["in review", "released", "returned", "superseded", "withdrawn"].map((word) => `'${word}'`).join(", ");
-  return [{ [raw((alias) => `array_position(array[${words}]::text[], ${alias}.state)`)]: "asc" }, { askedAt: "desc" }];
+  const rank = raw((alias) => `array_position(array[${words}]::text[], ${alias}.state)`);
+  return [{ [rank]: direction }, { askedAt: "desc" }];
 }

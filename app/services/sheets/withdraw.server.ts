@@ -1,7 +1,6 @@
-import { Assessment } from "#app/db/entities/assessment.ts";
 import { problem } from "#app/server/problem.server.ts";
 import { inScope, type ActorScope } from "#app/server/scope.server.ts";
-import { findRevision, lockSheetOf } from "./revision.server.ts";
+import { lockedRevision } from "./revision.server.ts";
 import { tellWithdrawn } from "./tell.server.ts";
 
 /** Withdraws a released revision: from now on its paper and its code say that it must not be used. @throws 409 when it is not released */
@@ -11,10 +10,7 @@ export async function withdrawRevision(
   reason: string,
 ): Promise<void> {
   await inScope(scope, async (em) => {
-    const revision = await findRevision(em, scope, revisionId, "release, return and withdraw sheets");
-    const { flow } = await em.findOneOrFail(Assessment, revision.assessment.id);
-    await lockSheetOf(em, flow.id);
-    await em.refresh(revision, { populate: ["sheet", "program", "askedBy"] });
+    const revision = await lockedRevision(em, scope, revisionId, "release, return and withdraw sheets");
     if (revision.state !== "released")
       throw problem(409, `This revision is ${revision.state}: only a released one can be withdrawn.`);
     Object.assign(revision, {

@@ -25,6 +25,7 @@ const columns: Column<SheetRow>[] = [
   {
     key: "state",
     head: "State",
+    sortable: true,
     cell: ({ state, supersededBy }) => (
       <span className={REVISION_CLASSES[state]}>{revisionState(state, supersededBy)}</span>
     ),
