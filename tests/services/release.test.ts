@@ -243,3 +243,19 @@ test("one that is not the newest assessment of its flow is not released", LONG, 
   expect(await refused(releaseRevision(owner, revision, "", ORIGIN))).toContain("has been assessed again since");
   await returnRevision(owner, revision, { reason: "A newer one is there" });
 });
+
+test("the list has what waits first, and is sorted and searched by what stands on paper", LONG, async () => {
+  const { listSheets, SHEET_SORTS } = await lists();
+  const waiting = await inReview("tern");
+  const { rows, total } = await listSheets(owner, { ...LIST, sort: "state" });
+  expect(rows[0]?.id).toBe(waiting.revision);
+  for (const sort of SHEET_SORTS)
+    for (const descending of [false, true])
+      expect((await listSheets(owner, { ...LIST, sort, descending })).rows).toHaveLength(rows.length);
+  const dates = (await listSheets(owner, { ...LIST, sort: "date" })).rows.map(({ at }) => at);
+  expect(dates).toEqual(dates.toSorted());
+  const number = rows[0]?.sheet ?? "";
+  const found = await listSheets(owner, { ...LIST, query: `${number} A` });
+  expect(found.total).toBeLessThan(total);
+  expect(new Set(found.rows.map(({ sheet }) => sheet))).toEqual(new Set([number]));
+});

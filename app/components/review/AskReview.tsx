@@ -1,14 +1,14 @@
 import { NoteField } from "#app/components/forms/NoteField.tsx";
 import type { ReviewView } from "#app/schemas/review-view.ts";
 import { ReviewForm, type ReviewAnswer } from "./ReviewForm.tsx";
-import { ReviewSection } from "./ReviewSection.tsx";
+import { HungSection } from "#app/components/ui/HungSection.tsx";
 
 /** Asks for a review, or says why that cannot be done now. */
 export function AskReview({ view, answer }: { view: ReviewView; answer: ReviewAnswer }) {
   const { notAsked, may, revision } = view;
   if (revision && revision.state !== "returned") return null;
   return (
-    <ReviewSection title="Ask for a review">
+    <HungSection title="Ask for a review">
       {notAsked !== null ? (
         <p>{notAsked}</p>
       ) : may.ask ? (
@@ -24,6 +24,6 @@ export function AskReview({ view, answer }: { view: ReviewView; answer: ReviewAn
       ) : (
         <p>An engineer or a process owner of the program asks for it.</p>
       )}
-    </ReviewSection>
+    </HungSection>
   );
 }

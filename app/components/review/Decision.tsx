@@ -2,7 +2,7 @@ import { getInputProps } from "@conform-to/react";
 import { NoteField } from "#app/components/forms/NoteField.tsx";
 import type { ReviewRevision, ReviewView } from "#app/schemas/review-view.ts";
 import { ReviewForm, type ReviewAnswer } from "./ReviewForm.tsx";
-import { ReviewSection } from "./ReviewSection.tsx";
+import { HungSection } from "#app/components/ui/HungSection.tsx";
 
 interface Props {
   view: ReviewView;
@@ -14,7 +14,7 @@ interface Props {
 export function Decision({ view: { may, assumed }, revision: { obstacles, askedBy }, answer }: Props) {
   return (
     <>
-      <ReviewSection title="Release">
+      <HungSection title="Release">
         {obstacles.length > 0 && (
           <>
             <p className="font-medium">It cannot be released {may.release ? "by you" : "as it is"}:</p>
@@ -65,13 +65,13 @@ export function Decision({ view: { may, assumed }, revision: { obstacles, askedB
             </ReviewForm>
           </>
         )}
-      </ReviewSection>
+      </HungSection>
       {may.return && (
-        <ReviewSection title="Return">
+        <HungSection title="Return">
           <ReviewForm intent="return" answer={answer} button="Return it" busy="Returning">
             {({ reason }) => <NoteField field={reason} label="Why it goes back" />}
           </ReviewForm>
-        </ReviewSection>
+        </HungSection>
       )}
     </>
   );

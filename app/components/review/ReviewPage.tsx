@@ -9,7 +9,7 @@ import { BlockingFindings } from "./BlockingFindings.tsx";
 import { Decision } from "./Decision.tsx";
 import { ReviewComments } from "./ReviewComments.tsx";
 import type { ReviewAnswer } from "./ReviewForm.tsx";
-import { ReviewSection } from "./ReviewSection.tsx";
+import { HungSection } from "#app/components/ui/HungSection.tsx";
 import { SinceReleaseView } from "./SinceReleaseView.tsx";
 
 interface Props {
@@ -35,16 +35,16 @@ export function ReviewPage({ view, answer }: Props) {
           </Link>
         }
       />
-      <div className="space-y-6">
+      <div>
         <ReviewState view={view} />
         {!inReview && <AskReview view={view} answer={answer} />}
-        <ReviewSection title="What blocks it" remark={countOf(blocking.length, "finding")}>
+        <HungSection title="What blocks it" remark={countOf(blocking.length, "finding")}>
           <BlockingFindings view={view} answer={answer} />
-        </ReviewSection>
-        <ReviewSection title="What changed" remark={view.since ? `since ${view.since.letter}` : "first of its sheet"}>
+        </HungSection>
+        <HungSection title="What changed" remark={view.since ? `since ${view.since.letter}` : "first of its sheet"}>
           <SinceReleaseView since={view.since} />
-        </ReviewSection>
-        <ReviewSection title="Assumed" remark={`${assumed.length} of ${inputs} inputs`}>
+        </HungSection>
+        <HungSection title="Assumed" remark={`${assumed.length} of ${inputs} inputs`}>
           {assumed.length === 0 ? (
             <p>Every input that the answer rests on was measured or is of the site’s own records.</p>
           ) : (
@@ -56,11 +56,11 @@ export function ReviewPage({ view, answer }: Props) {
               <AllAssumed view={view} />
             </>
           )}
-        </ReviewSection>
+        </HungSection>
         {revision && (
-          <ReviewSection title="Comments" remark={countOf(revision.comments.length, "comment")}>
+          <HungSection title="Comments" remark={countOf(revision.comments.length, "comment")}>
             <ReviewComments view={view} revision={revision} answer={answer} />
-          </ReviewSection>
+          </HungSection>
         )}
         {revision && inReview && <Decision view={view} revision={revision} answer={answer} />}
       </div>
@@ -95,7 +95,7 @@ function ReviewState({ view: { revision } }: { view: ReviewView }) {
   if (!revision) return null;
   const { askedBy, askedAt, note, decidedBy, decidedAt, reason, state, letter } = revision;
   return (
-    <section aria-label="How it stands" className="border-t border-ink pt-3">
+    <section aria-label="How it stands" className="border-t border-ink pt-3 pb-6">
       <p>
         {askedBy} asked for a review at {minuteOf(askedAt)}.{note && ` “${note}”`}
       </p>

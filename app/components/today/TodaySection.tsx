@@ -1,5 +1,6 @@
-import { useId, type ReactNode } from "react";
+import type { ReactNode } from "react";
 import { Link } from "react-router";
+import { HungSection } from "#app/components/ui/HungSection.tsx";
 
 interface Props {
   title: string;
@@ -10,30 +11,18 @@ interface Props {
   children: ReactNode;
 }
 
-/** A group of Today: its heading hangs at the left, its rows are ruled off from each other. */
+/** A group of Today, its rows ruled off from each other, with the way to those that are not shown. */
 export function TodaySection({ title, remark, more, children }: Props) {
-  const id = useId();
   return (
-    <section
-      aria-labelledby={id}
-      className="grid gap-x-4 border-t border-ink pt-3 pb-6 tablet:grid-cols-[144px_minmax(0,1fr)]"
-    >
-      <div className="max-tablet:mb-2">
-        <h2 id={id} className="font-semibold">
-          {title}
-        </h2>
-        {remark && <p className="text-label text-quiet">{remark}</p>}
-      </div>
-      <div className="min-w-0">
-        {children}
-        {more && more.count > 0 && (
-          <p className="border-t border-line pt-2">
-            <Link to={more.to} className="link">
-              {more.count} more
-            </Link>
-          </p>
-        )}
-      </div>
-    </section>
+    <HungSection title={title} remark={remark}>
+      {children}
+      {more && more.count > 0 && (
+        <p className="border-t border-line pt-2">
+          <Link to={more.to} className="link">
+            {more.count} more
+          </Link>
+        </p>
+      )}
+    </HungSection>
   );
 }

@@ -1,5 +1,5 @@
 import { Form, Link, redirect, useNavigation } from "react-router";
-import { Mark } from "#app/components/drawings/Mark.tsx";
+import { PublicCard } from "#app/components/layout/PublicCard.tsx";
 import { KIND_WORDS } from "#app/lib/mail/kind-words.ts";
 import { ANNOUNCEMENT_KINDS } from "#app/lib/mail/mail-choices.ts";
 import { requestIdContext } from "#app/server/contexts.server.ts";
@@ -39,43 +39,38 @@ export default function Unsubscribe({ loaderData: { email, kinds, what, done } }
   const busy = useNavigation().state !== "idle";
   const named = what === "digest" ? "The daily digest" : `'${KIND_WORDS[what]}'`;
   return (
-    <main id="main" className="mx-auto max-w-160 p-4 tablet:p-6">
-      <div className="frame">
-        <p className="flex items-center gap-2 border-b border-ink px-6 py-3 text-lead font-semibold">
-          <Mark /> Planeward
+    <PublicCard>
+      <div className="p-6">
+        {kinds.length === 0 ? (
+          <>
+            <h1 className="text-answer font-medium">{done ? "It is stopped" : "There is nothing to stop"}</h1>
+            <p role="status" className="mt-2 break-words">
+              {named} is not mailed to {email}
+              {done ? " any more." : "."} What asks you to act, or concerns hands and wafers at risk, still comes.
+            </p>
+          </>
+        ) : (
+          <>
+            <h1 className="text-answer font-medium">Stop this mail?</h1>
+            <p className="mt-2 break-words">
+              {named} will not be mailed to {email} any more
+              {what === "digest" && `: ${kinds.map((kind) => KIND_WORDS[kind].toLowerCase()).join(", ")}`}. Everything
+              stays to be seen on the pages themselves.
+            </p>
+            <Form method="post" className="mt-4">
+              <button type="submit" className="btn btn-primary" disabled={busy}>
+                {busy ? "Stopping" : "Stop it"}
+              </button>
+            </Form>
+          </>
+        )}
+        <p className="mt-4">
+          <Link to="/preferences/mail" className="link">
+            Choose what Planeward mails you
+          </Link>{" "}
+          <span className="text-quiet">(signed in)</span>
         </p>
-        <div className="p-6">
-          {kinds.length === 0 ? (
-            <>
-              <h1 className="text-answer font-medium">{done ? "It is stopped" : "There is nothing to stop"}</h1>
-              <p role="status" className="mt-2 break-words">
-                {named} is not mailed to {email}
-                {done ? " any more." : "."} What asks you to act, or concerns hands and wafers at risk, still comes.
-              </p>
-            </>
-          ) : (
-            <>
-              <h1 className="text-answer font-medium">Stop this mail?</h1>
-              <p className="mt-2 break-words">
-                {named} will not be mailed to {email} any more
-                {what === "digest" && `: ${kinds.map((kind) => KIND_WORDS[kind].toLowerCase()).join(", ")}`}. Everything
-                stays to be seen on the pages themselves.
-              </p>
-              <Form method="post" className="mt-4">
-                <button type="submit" className="btn btn-primary" disabled={busy}>
-                  {busy ? "Stopping" : "Stop it"}
-                </button>
-              </Form>
-            </>
-          )}
-          <p className="mt-4">
-            <Link to="/preferences/mail" className="link">
-              Choose what Planeward mails you
-            </Link>{" "}
-            <span className="text-quiet">(signed in)</span>
-          </p>
-        </div>
       </div>
-    </main>
+    </PublicCard>
   );
 }

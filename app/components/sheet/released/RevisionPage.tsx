@@ -2,7 +2,7 @@ import type { SubmissionResult } from "@conform-to/react";
 import { Link } from "react-router";
 import { noBreak } from "#app/components/drawings/no-break.ts";
 import { PageHead } from "#app/components/layout/PageHead.tsx";
-import { ReviewSection } from "#app/components/review/ReviewSection.tsx";
+import { HungSection } from "#app/components/ui/HungSection.tsx";
 import { Notice } from "#app/components/ui/Notice.tsx";
 import { minuteOf } from "#app/lib/minute-of.ts";
 import type { Paper } from "#app/lib/paper-size.ts";
@@ -36,9 +36,9 @@ export function RevisionPage({ view, paper, answer }: Props) {
           )
         }
       />
-      <div className="space-y-6">
+      <div>
         <Standing view={view} />
-        <ReviewSection title="Read">
+        <HungSection title="Read">
           <ul className="space-y-1">
             {papers.map(({ leg, name }) => (
               <li key={leg}>
@@ -48,11 +48,11 @@ export function RevisionPage({ view, paper, answer }: Props) {
               </li>
             ))}
           </ul>
-        </ReviewSection>
-        <ReviewSection title="Print" remark="the stored PDF, the same each time">
+        </HungSection>
+        <HungSection title="Print" remark="the stored PDF, the same each time">
           <PrintForm view={view} paper={paper} />
-        </ReviewSection>
-        <ReviewSection title="Release">
+        </HungSection>
+        <HungSection title="Release">
           <p>
             Released{releasedBy !== null && ` by ${releasedBy}`} at {minuteOf(releasedAt)}.{remark && ` “${remark}”`}
           </p>
@@ -70,9 +70,9 @@ export function RevisionPage({ view, paper, answer }: Props) {
               </Link>
             </p>
           )}
-        </ReviewSection>
+        </HungSection>
         {staff && staff.revisions.length > 0 && (
-          <ReviewSection title="Other revisions">
+          <HungSection title="Other revisions">
             <ul>
               {staff.revisions.map((each) => (
                 <li key={each.id} className="border-t border-line py-1.5 first:border-t-0 first:pt-0">
@@ -84,17 +84,17 @@ export function RevisionPage({ view, paper, answer }: Props) {
                 </li>
               ))}
             </ul>
-          </ReviewSection>
+          </HungSection>
         )}
         {staff && (
-          <ReviewSection title="Taken out" remark="who, when, for which place">
+          <HungSection title="Taken out" remark="who, when, for which place">
             <Prints prints={staff.prints} />
-          </ReviewSection>
+          </HungSection>
         )}
         {staff?.mayWithdraw && state === "released" && (
-          <ReviewSection title="Withdraw">
+          <HungSection title="Withdraw">
             <WithdrawForm answer={answer} />
-          </ReviewSection>
+          </HungSection>
         )}
       </div>
     </>

@@ -1,5 +1,5 @@
 import { Link } from "react-router";
-import { Mark } from "#app/components/drawings/Mark.tsx";
+import { PublicCard } from "#app/components/layout/PublicCard.tsx";
 import { minuteOf } from "#app/lib/minute-of.ts";
 import { statusPath } from "#app/lib/status-path.ts";
 import type { SheetStatus } from "#app/schemas/sheet-view.ts";
@@ -14,40 +14,35 @@ interface Props {
 export function SheetStatusPage({ status, now }: Props) {
   const { good, word, lines } = answerOf(status, now);
   return (
-    <main id="main" className="mx-auto max-w-160 p-4 tablet:p-6">
-      <div className="frame">
-        <p className="flex items-center gap-2 border-b border-ink px-6 py-3 text-lead font-semibold">
-          <Mark /> Planeward
+    <PublicCard>
+      <div className={`border-l-4 p-6 ${good ? "border-clear" : "border-stop"}`}>
+        <p className="text-quiet">
+          {status ? `Handling-risk sheet ${status.sheet} ${status.letter}` : "Handling-risk sheet"}
         </p>
-        <div className={`border-l-4 p-6 ${good ? "border-clear" : "border-stop"}`}>
-          <p className="text-quiet">
-            {status ? `Handling-risk sheet ${status.sheet} ${status.letter}` : "Handling-risk sheet"}
+        <h1 className={`mt-1 text-answer font-semibold ${good ? "text-clear" : "text-stop"}`}>{word}</h1>
+        {lines.map((line) => (
+          <p key={line} className="mt-2">
+            {line}
           </p>
-          <h1 className={`mt-1 text-answer font-semibold ${good ? "text-clear" : "text-stop"}`}>{word}</h1>
-          {lines.map((line) => (
-            <p key={line} className="mt-2">
-              {line}
-            </p>
-          ))}
-          {status?.current && (
-            <p className="mt-2">
-              <Link to={statusPath(status.current)} className="link">
-                See the revision in force
-              </Link>
-            </p>
-          )}
-          <p className="mt-4 text-label text-quiet">Asked at {minuteOf(now)}.</p>
-          {status && (
-            <p className="mt-1">
-              <Link to={`/sheets?q=${encodeURIComponent(status.sheet)}`} className="link">
-                Open the sheet
-              </Link>{" "}
-              <span className="text-quiet">(signed in)</span>
-            </p>
-          )}
-        </div>
+        ))}
+        {status?.current && (
+          <p className="mt-2">
+            <Link to={statusPath(status.current)} className="link">
+              See the revision in force
+            </Link>
+          </p>
+        )}
+        <p className="mt-4 text-label text-quiet">Asked at {minuteOf(now)}.</p>
+        {status && (
+          <p className="mt-1">
+            <Link to={`/sheets?q=${encodeURIComponent(status.sheet)}`} className="link">
+              Open the sheet
+            </Link>{" "}
+            <span className="text-quiet">(signed in)</span>
+          </p>
+        )}
       </div>
-    </main>
+    </PublicCard>
   );
 }
 
