@@ -125,6 +125,7 @@ export default [
       route(":instrumentId/reference", "routes/_app/instruments/reference.tsx"),
     ]),
     route("demo", "routes/_app/demo.tsx"),
+    route("settings", "routes/_app/settings.tsx"),
     route("preferences", "routes/_app/preferences.tsx"),
     route("preferences/mail", "routes/_app/mail/choices.tsx"),
     ...prefix("mail", [

@@ -13,6 +13,8 @@ const ADD_ONLY = [
   "demo_record",
 ];
 const NEVER_TAKEN_OUT = ["film_stress_value", "step_measurement", "mail_outbox"];
+/** One row that the migration puts in. */
+const READ_AND_CHANGE = ["site_setting"];
 const READ_AND_WRITE = [
   "person",
   "credential",
@@ -59,6 +61,7 @@ export function grantStatements(role: string): string[] {
     `revoke all on all tables in schema public from ${quoted}`,
     ...ADD_ONLY.map((table) => `grant select, insert on "${table}" to ${quoted}`),
     ...NEVER_TAKEN_OUT.map((table) => `grant select, insert, update on "${table}" to ${quoted}`),
+    ...READ_AND_CHANGE.map((table) => `grant select, update on "${table}" to ${quoted}`),
     ...READ_AND_WRITE.map((table) => `grant select, insert, update, delete on "${table}" to ${quoted}`),
   ];
 }

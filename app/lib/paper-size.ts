@@ -9,7 +9,8 @@ export type Paper = keyof typeof PAPERS;
 export const FILING_MARGIN = 20;
 export const MARGIN = 10;
 
-/** The paper that an address asks for; A4 for anything else. */
-export function paperAskedFor(asked: string | null): Paper {
-  return asked?.toLowerCase() === "letter" ? "letter" : "a4";
+/** The paper that an address asks for; null when it asks for none that there is. */
+export function paperAskedFor(asked: string | null): Paper | null {
+  const name = asked?.toLowerCase();
+  return name === "a4" || name === "letter" ? name : null;
 }

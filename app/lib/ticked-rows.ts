@@ -22,6 +22,12 @@ export interface TickedRows {
 export const countOf = ({ rows }: TickedRows, state: TickedRow["state"]) =>
   rows.filter((row) => row.state === state).length;
 
+/** What was done, with the rows that were ticked as well and left from the beginning, so that none goes without a word. */
+export function withLeft(done: TickedRows, asked: TickedRows): TickedRows {
+  const known = new Set(done.rows.map(({ id }) => id));
+  return { ...done, rows: [...done.rows, ...asked.rows.filter(({ id, state }) => state === "left" && !known.has(id))] };
+}
+
 /** '2 stacks', '1 stack' */
 export const some = (number: number, [one, many]: readonly [string, string]) =>
   `${number} ${number === 1 ? one : many}`;

@@ -16,6 +16,7 @@ const ALL: (Place & { open: (actor: Actor) => boolean })[] = [
   { name: "Scans", path: "/scans", open: (actor) => programsWhere(actor, "see the work").length > 0 },
   { name: "Sheets", path: "/sheets", open: (actor) => programsWhere(actor, "see released sheets").length > 0 },
   { name: "Method", path: "/method", open: () => true },
+  { name: "Settings", path: "/settings", open: (actor) => mayOnSite(actor, "edit site settings") },
 ];
 
 /** What lies within a place and is worth finding by its name; `also` has other words for it. */

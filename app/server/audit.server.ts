@@ -34,6 +34,7 @@ const SUBJECTS: Record<string, string> = {
   Tape: "tape",
   Equipment: "equipment",
   SiteLimit: "limit",
+  SiteSetting: "site setting",
   Stack: "stack",
   StackLayer: "stack layer",
   Flow: "flow",

@@ -32,6 +32,7 @@ const SITE_TABLE: Record<keyof typeof SITE_PERMISSIONS, string> = {
   "keep import profiles": "   - y y y y -",
   "check instruments": "   - y y y y -",
   "edit carriers, bonds and limits": "- - - - y y",
+  "edit site settings": "  - - - - - y",
   "load and remove the demo": "- - - - y -",
   "see the audit trail": "- - - - - y",
 };
@@ -99,6 +100,10 @@ test("an engineer is offered the places in the order of the job", () => {
     "Sheets",
     "Method",
   ]);
+});
+
+test("an administrator finds the site's settings among the places", () => {
+  expect(placesFor(actor("administrator")).at(-1)).toEqual({ name: "Settings", path: "/settings" });
 });
 
 test("programs come in the order of their names, only where the person may", () => {

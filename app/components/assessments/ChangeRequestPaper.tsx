@@ -1,12 +1,22 @@
+import type { CSSProperties } from "react";
 import { Link } from "react-router";
 import { FindingTag } from "#app/components/drawings/FindingTag.tsx";
 import { noBreak } from "#app/components/drawings/no-break.ts";
 import { TitleBlock } from "#app/components/drawings/TitleBlock.tsx";
 import { PrintButton } from "#app/components/sheet/PrintButton.tsx";
 import type { CustomerChange, CustomerFlow } from "#app/lib/customer-change.ts";
+import { PAPERS, type Paper } from "#app/lib/paper-size.ts";
+
+interface Props {
+  change: CustomerChange;
+  /** address of the question */
+  back: string;
+  paper: Paper;
+}
 
 /** One page for a customer: what changes, and what becomes of their flows. No limit of the site and no other customer on it. */
-export function ChangeRequestPaper({ change, back }: { change: CustomerChange; back: string }) {
+export function ChangeRequestPaper({ change, back, paper }: Props) {
+  const { width, height, page } = PAPERS[paper];
   const { question, flows, more, titleBlock, cautions } = change;
   return (
     <>
@@ -17,7 +27,10 @@ export function ChangeRequestPaper({ change, back }: { change: CustomerChange; b
         <PrintButton />
       </div>
       <main id="main" className="bg-wash py-6 print:bg-transparent print:py-0">
-        <div className="paper page-a4 relative mx-auto box-border flex flex-col p-3 text-[11pt]/[14pt] tablet:min-h-[297mm] tablet:w-[210mm] tablet:py-[10mm] tablet:pr-[10mm] tablet:pl-[20mm] print:min-h-[297mm] print:w-[210mm] print:py-[10mm] print:pr-[10mm] print:pl-[20mm]">
+        <div
+          className={`paper relative mx-auto box-border flex flex-col p-3 text-[11pt]/[14pt] tablet:min-h-(--height) tablet:w-(--width) tablet:py-[10mm] tablet:pr-[10mm] tablet:pl-[20mm] print:min-h-(--height) print:w-(--width) print:py-[10mm] print:pr-[10mm] print:pl-[20mm] ${page}`}
+          style={{ "--width": `${width}mm`, "--height": `${height}mm` } as CSSProperties}
+        >
           <div className="flex flex-1 flex-col border-[0.5mm] border-ink">
             <div className="border-b-[0.35mm] border-ink px-[3mm] py-[2mm]">
               <p>Change request, before and after. Computed, not released: for discussion</p>

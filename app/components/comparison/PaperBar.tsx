@@ -25,7 +25,7 @@ export function PaperBar({ back, backTo, paper }: Props) {
           {(Object.keys(PAPERS) as Paper[]).map((each) => (
             <Link
               key={each}
-              to={each === "a4" ? search || "?" : `${search}${search === "" ? "?" : "&"}paper=${each}`}
+              to={`${search}${search === "" ? "?" : "&"}paper=${each}`}
               replace
               aria-current={each === paper ? "true" : undefined}
               className={CHOICE}

@@ -7,13 +7,15 @@ interface Props {
   busy: string;
   /** id of the form that it sends, where it stands outside of it */
   form?: string;
+  /** takes something away: not the filled one */
+  removes?: boolean;
 }
 
 /** The one filled button of a form. It keeps its place while the form is on its way. */
-export function SubmitButton({ children, busy, form }: Props) {
+export function SubmitButton({ children, busy, form, removes = false }: Props) {
   const waiting = useNavigation().state === "submitting";
   return (
-    <button type="submit" form={form} className="btn btn-primary" disabled={waiting}>
+    <button type="submit" form={form} className={removes ? "btn btn-remove" : "btn btn-primary"} disabled={waiting}>
       {waiting ? busy : children}
     </button>
   );

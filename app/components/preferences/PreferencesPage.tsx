@@ -1,4 +1,5 @@
 import { Form, Link } from "react-router";
+import { Choices } from "#app/components/forms/Choices.tsx";
 import { SubmitButton } from "#app/components/forms/SubmitButton.tsx";
 import { PageHead } from "#app/components/layout/PageHead.tsx";
 import { Notice } from "#app/components/ui/Notice.tsx";
@@ -84,30 +85,5 @@ export function PreferencesPage({ preferences, saved }: Props) {
         </div>
       </Form>
     </>
-  );
-}
-
-interface ChoicesProps<Value extends string> {
-  title: string;
-  name: string;
-  words: Record<Value, string>;
-  chosen: Value;
-  children?: string;
-}
-
-function Choices<Value extends string>({ title, name, words, chosen, children }: ChoicesProps<Value>) {
-  return (
-    <fieldset className="border-b border-line p-4 tablet:px-6">
-      <legend className="contents">
-        <span className="font-semibold">{title}</span>
-      </legend>
-      {Object.entries<string>(words).map(([value, label]) => (
-        <label key={value} className="flex min-h-8 items-center gap-2 max-tablet:min-h-11">
-          <input type="radio" name={name} value={value} defaultChecked={value === chosen} />
-          {label}
-        </label>
-      ))}
-      {children && <p className="text-quiet">{children}</p>}
-    </fieldset>
   );
 }

@@ -27,7 +27,7 @@ export function SheetBar({ assessmentId, paper, legs }: Props) {
             {legs.rows.map(({ number, name }) => (
               <Link
                 key={number}
-                to={`?leg=${number}${paper === "a4" ? "" : `&paper=${paper}`}`}
+                to={`?leg=${number}&paper=${paper}`}
                 replace
                 aria-current={number === leg ? "true" : undefined}
                 className={CHOICE}
@@ -41,7 +41,7 @@ export function SheetBar({ assessmentId, paper, legs }: Props) {
           {(Object.keys(PAPERS) as Paper[]).map((each) => (
             <Link
               key={each}
-              to={each === "a4" ? `?${legQuery("", leg)}` : `?paper=${each}${legQuery("&", leg)}`}
+              to={`?paper=${each}${legQuery("&", leg)}`}
               replace
               aria-current={each === paper ? "true" : undefined}
               className={CHOICE}

@@ -35,6 +35,7 @@ import { ScanReading } from "./scan-reading.ts";
 import { Session } from "./session.ts";
 import { Silicon } from "./silicon.ts";
 import { SiteLimit } from "./site-limit.ts";
+import { SiteSetting } from "./site-setting.ts";
 import { Stack } from "./stack.ts";
 import { StackLayer } from "./stack-layer.ts";
 import { StepMeasurement } from "./step-measurement.ts";
@@ -59,6 +60,7 @@ export const entities = [
   Tape,
   Equipment,
   SiteLimit,
+  SiteSetting,
   Stack,
   StackLayer,
   Flow,

@@ -20,6 +20,7 @@ import { Instruments } from "./2026-12-07-instruments.ts";
 import { FoundQuickly } from "./2026-12-08-found-quickly.ts";
 import { DemoComesAndGoes } from "./2026-12-09-demo-comes-and-goes.ts";
 import { Mail } from "./2026-12-10-mail.ts";
+import { SiteSetting } from "./2026-12-11-site-setting.ts";
 
 /** Every migration in the order in which it runs. */
 export const migrations = [
@@ -45,4 +46,5 @@ export const migrations = [
   { name: "2026-12-08-found-quickly", class: FoundQuickly },
   { name: "2026-12-09-demo-comes-and-goes", class: DemoComesAndGoes },
   { name: "2026-12-10-mail", class: Mail },
+  { name: "2026-12-11-site-setting", class: SiteSetting },
 ];

@@ -3,6 +3,7 @@ import { customerChange } from "#app/lib/customer-change.ts";
 import { scopeOf } from "#app/server/contexts.server.ts";
 import { problem } from "#app/server/problem.server.ts";
 import { changeRequestPage } from "#app/services/assessments/change-request-page.server.ts";
+import { paperFor } from "#app/services/site-settings.server.ts";
 import type { Route } from "./+types/change-request";
 
 export const meta: Route.MetaFunction = () => [{ title: "Change request · Planeward" }];
@@ -22,6 +23,7 @@ export async function loader({ context, url }: Route.LoaderArgs) {
       preparedBy: scope.actor.name,
       date: new Date().toISOString().slice(0, 10),
     }),
+    paper: await paperFor(scope, url),
     back: `/assessments/change-request?${new URLSearchParams({ ...form.fields }).toString()}`,
   };
 }

@@ -1,9 +1,9 @@
 import { FlowComparisonPaper } from "#app/components/flows/compare/FlowComparisonPaper.tsx";
 import { FLOWS } from "#app/lib/comparison/kinds.ts";
-import { paperAskedFor } from "#app/lib/paper-size.ts";
 import { scopeOf } from "#app/server/contexts.server.ts";
 import { wrongNumber } from "#app/services/comparison.server.ts";
 import { flowComparison } from "#app/services/flow-comparison/comparison.server.ts";
+import { paperFor } from "#app/services/site-settings.server.ts";
 import type { Route } from "./+types/flow-comparison";
 
 export const meta: Route.MetaFunction = () => [{ title: "Comparison of flows · Planeward" }];
@@ -16,7 +16,7 @@ export async function loader({ context, url }: Route.LoaderArgs) {
     asked,
     members,
     compared,
-    paper: paperAskedFor(url.searchParams.get("paper")),
+    paper: await paperFor(scopeOf(context), url),
     preparedBy: scope.actor.name,
     printedAt: new Date().toISOString(),
   };

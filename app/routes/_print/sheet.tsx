@@ -1,7 +1,7 @@
 import { SheetPage } from "#app/components/sheet/SheetPage.tsx";
-import { paperAskedFor } from "#app/lib/paper-size.ts";
 import { scopeOf } from "#app/server/contexts.server.ts";
 import { draftSheet } from "#app/services/sheets/draft-sheet.server.ts";
+import { paperFor } from "#app/services/site-settings.server.ts";
 import type { Route } from "./+types/sheet";
 
 export const meta: Route.MetaFunction = ({ loaderData }) => [
@@ -13,7 +13,7 @@ export const meta: Route.MetaFunction = ({ loaderData }) => [
 export async function loader({ context, params, url }: Route.LoaderArgs) {
   return {
     ...(await draftSheet(scopeOf(context), params.assessmentId, url.searchParams.get("leg"))),
-    paper: paperAskedFor(url.searchParams.get("paper")),
+    paper: await paperFor(scopeOf(context), url),
     printedAt: new Date().toISOString(),
   };
 }

@@ -1,7 +1,7 @@
 import { SweepPaper } from "#app/components/stacks/sweep/SweepPaper.tsx";
-import { paperAskedFor } from "#app/lib/paper-size.ts";
 import { scopeOf } from "#app/server/contexts.server.ts";
 import { sweptStack } from "#app/services/stack-sweep/sweep.server.ts";
+import { paperFor } from "#app/services/site-settings.server.ts";
 import type { Route } from "./+types/sweep";
 
 export const meta: Route.MetaFunction = () => [{ title: "Sweep of a stack · Planeward" }];
@@ -11,7 +11,7 @@ export async function loader({ context, params, url }: Route.LoaderArgs) {
   const { stack, asked, swept } = await sweptStack(scope, params.stackId, url.searchParams);
   return {
     view: { stack, asked, swept },
-    paper: paperAskedFor(url.searchParams.get("paper")),
+    paper: await paperFor(scopeOf(context), url),
     preparedBy: scope.actor.name,
     printedAt: new Date().toISOString(),
   };

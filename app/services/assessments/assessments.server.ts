@@ -23,29 +23,32 @@ export type Ran = { outcome: "stored"; id: string } | NotComputable;
  * nowhere: it comes back as a reason, with the step that it concerns.
  */
 export async function runAssessment(scope: ActorScope, flowId: string): Promise<Ran> {
-  return inScope(scope, async (em): Promise<Ran> => {
-    const { flow, input } = await presentFlow(em, scope, flowId);
-    requireInProgram(scope, "run assessments", flow.program.id, "flow");
-    const computed = compute(input);
-    if (computed.outcome === "not computable") return computed;
-    const { result } = computed;
-    const created = em.create(Assessment, {
-      id: randomUUID(),
-      program: flow.program.id,
-      flow: flow.id,
-      ...(await nextNumbers(em, flow)),
-      flowName: flow.name,
-      engineVersion: ENGINE_VERSION,
-      inputHash: inputHash(input),
-      input,
-      result,
-      outcome: result.verdict.outcome,
-      createdAt: new Date(),
-      createdBy: scope.actor.id,
-    });
-    await em.flush();
-    return { outcome: "stored", id: created.id };
+  return inScope(scope, (em) => assessWithin(em, scope, flowId));
+}
+
+/** The same inside a running transaction. */
+export async function assessWithin(em: EntityManager, scope: ActorScope, flowId: string): Promise<Ran> {
+  const { flow, input } = await presentFlow(em, scope, flowId);
+  requireInProgram(scope, "run assessments", flow.program.id, "flow");
+  const computed = compute(input);
+  if (computed.outcome === "not computable") return computed;
+  const { result } = computed;
+  const created = em.create(Assessment, {
+    id: randomUUID(),
+    program: flow.program.id,
+    flow: flow.id,
+    ...(await nextNumbers(em, flow)),
+    flowName: flow.name,
+    engineVersion: ENGINE_VERSION,
+    inputHash: inputHash(input),
+    input,
+    result,
+    outcome: result.verdict.outcome,
+    createdAt: new Date(),
+    createdBy: scope.actor.id,
   });
+  await em.flush();
+  return { outcome: "stored", id: created.id };
 }
 
 const LOT_AGAIN =

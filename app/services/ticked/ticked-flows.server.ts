@@ -5,7 +5,7 @@ import { revisionLetters } from "#app/lib/assessment-revision.ts";
 import type { TickedRow, TickedRows } from "#app/lib/ticked-rows.ts";
 import { mayInProgram, programsWhere } from "#app/policies/permissions.ts";
 import { inScope, type ActorScope } from "#app/server/scope.server.ts";
-import { runAssessment } from "../assessments/assessments.server.ts";
+import { assessWithin } from "../assessments/assessments.server.ts";
 import { outOfDateAmong } from "../assessments/out-of-date.server.ts";
 import { requireInSomeProgram } from "../permission.server.ts";
 
@@ -61,24 +61,30 @@ async function flowRows(em: EntityManager, scope: ActorScope, ids: readonly stri
 
 /**
  * Assesses those of the flows that are not up to date, one after the other, each in a transaction of its own: an assessment that is
- * stored stays, whatever comes of the next flow.
+ * stored stays, whatever comes of the next flow. Whether a flow is up to date is asked when its turn comes, so that the same flows
+ * asked for twice at once get one revision, not two.
  */
 export async function assessTicked(scope: ActorScope, ids: readonly string[]): Promise<TickedRows> {
-  const { rows, hidden } = await tickedFlows(scope, ids);
-  const done: TickedRow[] = [];
-  for (const row of rows) done.push(row.state === "to do" ? await assessed(scope, row) : row);
-  return { rows: done, hidden };
+  requireInSomeProgram(scope, RUN);
+  const rows: TickedRow[] = [];
+  for (const id of ids) rows.push(...(await inScope(scope, (em) => assessed(em, scope, id))));
+  return { rows, hidden: ids.length - rows.length };
 }
 
-async function assessed(scope: ActorScope, row: TickedRow): Promise<TickedRow> {
-  const ran = await runAssessment(scope, row.id);
+/** The flow's row with what was done; none when the flow is gone, or not the person's to see. */
+async function assessed(em: EntityManager, scope: ActorScope, id: string): Promise<TickedRow[]> {
+  await em.execute("select pg_advisory_xact_lock(hashtextextended(?, 0))", [`ticked flow ${id}`]);
+  const rows = await flowRows(em, scope, [id]);
+  return Promise.all(rows.map((row) => (row.state === "to do" ? assessedRow(em, scope, row) : row)));
+}
+
+async function assessedRow(em: EntityManager, scope: ActorScope, row: TickedRow): Promise<TickedRow> {
+  const ran = await assessWithin(em, scope, row.id);
   if (ran.outcome === "not computable") {
     const where = ran.step === null ? "" : `Step ${ran.step}: `;
     return { ...row, state: "left", words: `It cannot be computed. ${where}${ran.reason}` };
   }
-  const { number, outcome } = await inScope(scope, (em) =>
-    em.findOneOrFail(Assessment, { id: ran.id }, { fields: ["number", "outcome"] }),
-  );
+  const { number, outcome } = await em.findOneOrFail(Assessment, { id: ran.id }, { fields: ["number", "outcome"] });
   return {
     ...row,
     path: `/assessments/${ran.id}`,

@@ -69,8 +69,9 @@ describe("pages of a sheet", () => {
     expect(plan(demoSheet("Petrel"), "a4").hands.at(-1)?.record).toBeGreaterThan(5);
   });
 
-  it("are of the paper that the address asks for, A4 for anything else", () => {
+  it("are of the paper that the address asks for, none for anything else", () => {
     for (const asked of ["letter", "Letter"]) expect(paperAskedFor(asked)).toBe("letter");
-    for (const asked of [null, "", "A4", "a3", "../letter"]) expect(paperAskedFor(asked)).toBe("a4");
+    for (const asked of ["a4", "A4"]) expect(paperAskedFor(asked)).toBe("a4");
+    for (const asked of [null, "", "a3", "../letter"]) expect(paperAskedFor(asked)).toBeNull();
   });
 });

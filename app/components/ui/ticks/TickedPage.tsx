@@ -1,10 +1,11 @@
 import type { ReactNode } from "react";
-import { Form, Link } from "react-router";
+import { Form, Link, useNavigation } from "react-router";
+import { SubmitButton } from "#app/components/forms/SubmitButton.tsx";
 import { PageHead } from "#app/components/layout/PageHead.tsx";
 import { EmptyState } from "#app/components/ui/EmptyState.tsx";
 import { Notice } from "#app/components/ui/Notice.tsx";
 import { TickedTable } from "#app/components/ui/ticks/TickedTable.tsx";
-import { countOf, some, type TickedRows } from "#app/lib/ticked-rows.ts";
+import { countOf, some, withLeft, type TickedRows } from "#app/lib/ticked-rows.ts";
 
 interface Props {
   title: string;
@@ -19,13 +20,20 @@ interface Props {
   did: string;
   /** what to know before */
   children: ReactNode;
-  /** the button, by the number that it does something with */
-  button: (number: string) => ReactNode;
+  /** the button, and what it says and the page adds while it is at work; '2 stacks' is handed over */
+  button: {
+    label: (number: string) => string;
+    busy: (number: string) => string;
+    meanwhile?: string;
+    removes?: boolean;
+  };
 }
 
 /** Asks once more what is to be done with the rows that are ticked, and says afterwards, row by row, what was. */
 export function TickedPage({ title, what, list, asked, done, did, children, button }: Props) {
   const toDo = asked.rows.filter(({ state }) => state === "to do");
+  const number = some(toDo.length, what);
+  const atWork = useNavigation().state === "submitting";
   const back = (
     <Link to={list.path} className="btn">
       {done ? `To the ${what[1]}` : "Leave them as they are"}
@@ -40,7 +48,7 @@ export function TickedPage({ title, what, list, asked, done, did, children, butt
             kind={countOf(done, "left") + done.hidden > 0 ? "caution" : "done"}
             title={`${did}: ${some(countOf(done, "done"), what)}.`}
           />
-          <TickedTable caption="What was done" head="What happened" what={what} {...done} />
+          <TickedTable caption="What was done" head="What happened" what={what} {...withLeft(done, asked)} />
           <div className="mt-4">{back}</div>
         </>
       ) : asked.rows.length === 0 ? (
@@ -50,14 +58,28 @@ export function TickedPage({ title, what, list, asked, done, did, children, butt
       ) : (
         <>
           <p className="mb-3 max-w-[60em]">{children}</p>
-          <TickedTable caption={`What is ticked of the ${what[1]}`} head="What happens" what={what} {...asked} />
-          <Form method="post" className="mt-4 flex flex-wrap gap-2">
+          <div aria-busy={atWork}>
+            <TickedTable caption={`What is ticked of the ${what[1]}`} head="What happens" what={what} {...asked} />
+          </div>
+          <Form
+            method="post"
+            className="mt-4 flex flex-wrap items-center gap-2"
+            // A second press before the button has gone grey would send all of it again.
+            onSubmit={(event) => atWork && event.preventDefault()}
+          >
             {toDo.map(({ id, version }) => (
               <input key={id} type="hidden" name="of" value={`${id} ${version}`} />
             ))}
-            {toDo.length > 0 && button(some(toDo.length, what))}
-            {back}
+            {toDo.length > 0 && (
+              <SubmitButton busy={button.busy(number)} removes={button.removes ?? false}>
+                {button.label(number)}
+              </SubmitButton>
+            )}
+            {!atWork && back}
           </Form>
+          <p role="status" className="mt-2 max-w-[60em] text-quiet empty:hidden">
+            {atWork && button.meanwhile !== undefined && `${button.busy(number)}. ${button.meanwhile}`}
+          </p>
         </>
       )}
     </>

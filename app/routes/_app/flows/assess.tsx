@@ -1,4 +1,3 @@
-import { SubmitButton } from "#app/components/forms/SubmitButton.tsx";
 import { TickedPage } from "#app/components/ui/ticks/TickedPage.tsx";
 import { tickedIds, tickedVersions } from "#app/lib/ticked-ids.ts";
 import { scopeOf } from "#app/server/contexts.server.ts";
@@ -25,7 +24,12 @@ export default function AssessFlows({ loaderData, actionData }: Route.ComponentP
       asked={loaderData}
       done={actionData}
       did="Assessed"
-      button={(number) => <SubmitButton busy="Assessing">{`Assess ${number}`}</SubmitButton>}
+      button={{
+        label: (number) => `Assess ${number}`,
+        busy: (number) => `Assessing ${number}`,
+        meanwhile:
+          "One after the other; what has become of each is said here. If you leave, it goes on, and each flow shows its new revision.",
+      }}
     >
       Each is assessed as it is now and gets a new revision. Sheets of earlier revisions stay as they are.
     </TickedPage>

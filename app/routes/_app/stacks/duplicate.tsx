@@ -1,4 +1,3 @@
-import { SubmitButton } from "#app/components/forms/SubmitButton.tsx";
 import { TickedPage } from "#app/components/ui/ticks/TickedPage.tsx";
 import { tickedIds, tickedVersions } from "#app/lib/ticked-ids.ts";
 import { scopeOf } from "#app/server/contexts.server.ts";
@@ -25,7 +24,7 @@ export default function DuplicateStacks({ loaderData, actionData }: Route.Compon
       asked={loaderData}
       done={actionData}
       did="Copied"
-      button={(number) => <SubmitButton busy="Copying">{`Duplicate ${number}`}</SubmitButton>}
+      button={{ label: (number) => `Duplicate ${number}`, busy: (number) => `Copying ${number}` }}
     >
       Each copy stays in the program of its stack, as it is saved now, under the same name with a number behind it.
     </TickedPage>

@@ -24,11 +24,11 @@ export default function RemoveStacks({ loaderData, actionData }: Route.Component
       asked={loaderData}
       done={actionData}
       did="Removed"
-      button={(number) => (
-        <button type="submit" className="btn btn-remove">
-          Remove {number} for good
-        </button>
-      )}
+      button={{
+        label: (number) => `Remove ${number} for good`,
+        busy: (number) => `Removing ${number}`,
+        removes: true,
+      }}
     >
       There is no way back. Flows and assessments do not depend on these stacks and stay.
     </TickedPage>

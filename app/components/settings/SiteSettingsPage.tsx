@@ -1,0 +1,47 @@
+import { Form } from "react-router";
+import { Choices } from "#app/components/forms/Choices.tsx";
+import { SubmitButton } from "#app/components/forms/SubmitButton.tsx";
+import { PageHead } from "#app/components/layout/PageHead.tsx";
+import { Notice } from "#app/components/ui/Notice.tsx";
+import type { Paper } from "#app/lib/paper-size.ts";
+import type { RecordStamp } from "#app/schemas/record-stamp.ts";
+
+const PAPER_WORDS: Record<Paper, string> = { a4: "A4, 210 × 297 mm", letter: "Letter, 8.5 × 11 inches" };
+
+interface Props {
+  paper: Paper;
+  stamp: RecordStamp;
+  saved: boolean;
+  /** what somebody else has saved in the meantime, and what this person had chosen */
+  refused: { reason: string; version: number; chosen: Paper } | undefined;
+}
+
+/** What holds for the whole site. */
+export function SiteSettingsPage({ paper, stamp, saved, refused }: Props) {
+  const { version, updatedAt, updatedBy } = stamp;
+  return (
+    <>
+      <PageHead title="Site settings" remark="For everybody on this site" />
+      {refused && (
+        <Notice kind="error" title="Not saved: somebody else saved first">
+          {refused.reason}
+        </Notice>
+      )}
+      {saved && !refused && <Notice kind="done" title="The site’s settings are saved." />}
+      {/* A new version of the settings is a new form, or a choice made before would stay in it. */}
+      <Form key={`${refused?.version ?? version} ${paper}`} method="post" className="frame max-w-160">
+        <input type="hidden" name="version" value={refused?.version ?? version} />
+        <Choices title="Paper" name="paper" words={PAPER_WORDS} chosen={refused?.chosen ?? paper}>
+          What handling-risk sheets and other printed pages are laid out for, and their PDF. Each such page can still be
+          opened for the other paper.
+        </Choices>
+        <div className="flex flex-wrap items-center gap-x-4 gap-y-2 p-4 tablet:px-6">
+          <SubmitButton busy="Saving">Save settings</SubmitButton>
+          <span className="text-quiet">
+            Last changed {updatedAt.slice(0, 10)}, {updatedBy}
+          </span>
+        </div>
+      </Form>
+    </>
+  );
+}
