@@ -20,6 +20,8 @@ export interface StepsChart {
   limits: CourseStep["limits"][];
   /** where flows have rolled up, by place from 1, with their letters */
   rolled: { from: number; to: number; label: string }[];
+  /** the warp that uses most of its tool's limit, by the place from 1 after which the wafer lies with it, m, with sign */
+  tightest: { letter: string; x: number; y: number }[];
   /** where two flows change places, by place from 1 */
   crossings: { x: number; y: number; number: number }[];
 }

@@ -47,6 +47,7 @@ export function comparisonPlot(chart: ComparisonChart): Plot {
       markersAt: markers(chart, place),
     })),
     xLimits: thicknessLimits,
+    xLimitWords: "top",
     yLimits: warpLimits,
     bands: styled.flatMap(({ curve, colourToken }) => curledBands(curve, colourToken, scale, axis.to)),
     marks: [

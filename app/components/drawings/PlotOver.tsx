@@ -101,7 +101,11 @@ function XLimits(props: PlotOverProps) {
   ));
   const words = limits.map((limit, index) => {
     const place = places[index] ?? { x: 0, anchor: "start", tier: 0 };
-    const last = frame.bottom - 11 - place.tier * (limit.lines.length * lineHeight + 4);
+    const tiers = place.tier * (limit.lines.length * lineHeight + 4);
+    const last =
+      plot.xLimitWords === "top"
+        ? frame.top + textSize + 4 + tiers + (limit.lines.length - 1) * lineHeight
+        : frame.bottom - 11 - tiers;
     return (
       <g key={limit.value}>
         {limit.lines.map((line, row) => (
@@ -293,7 +297,7 @@ function EndLabels({ plot, frame, scales, textSize }: PlotOverProps) {
             fill: colour(series.colourToken),
           }}
         >
-          {series.label}
+          {series.endLabel ?? series.label}
         </text>
       </g>
     );

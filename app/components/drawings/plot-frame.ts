@@ -9,7 +9,7 @@ export function plotFrame(plot: Plot, width: number, height: number, textSize: n
   const ticks = Math.max(...plot.y.ticks.map((tick) => textWidth(tick.text, textSize)), 0);
   const labels = plot.series
     .filter(({ labelled = "end" }) => labelled === "end")
-    .map((series) => textWidth(series.label, textSize, true) + 18);
+    .map((series) => textWidth(series.endLabel ?? series.label, textSize, true) + 18);
   const right = endLabels ? Math.min(170, Math.max(60, ...labels)) : 12;
   return {
     left: Math.ceil(ticks + 10),

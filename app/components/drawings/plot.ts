@@ -36,6 +36,8 @@ export interface PlotBand {
 export interface PlotSeries {
   id: string;
   label: string;
+  /** words at the line's end where the label is too long for it: a line may end in the middle of the others */
+  endLabel?: string;
   dash: PlotDash;
   marker: PlotMarker;
   colourToken: ColourToken;
@@ -92,6 +94,8 @@ export interface Plot {
   series: readonly PlotSeries[];
   /** Vertical dotted lines. */
   xLimits?: readonly PlotLimit[];
+  /** Where the words of these lines stand: at the foot (default), or at the top where the curves fall to the right. */
+  xLimitWords?: "foot" | "top";
   /** Horizontal dashed lines in the colour of a stop. */
   yLimits?: readonly PlotLimit[];
   /** Shaded from the left edge; `label` stands right of its line at the top, `inside` left of it. */

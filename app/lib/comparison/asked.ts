@@ -13,7 +13,7 @@ export interface ComparisonAsked {
   ids: string[];
   /** of stacks: temperature as it was typed, blank for 25 °C */
   at: string;
-  /** of flows: what their warp is drawn along, blank for silicon thickness where two or more of them are thinned */
+  /** of flows: what their warp is drawn along, blank for their steps */
   along: "" | "thickness" | "steps";
   /** blank for what suits the chart */
   scale: "" | "log" | "linear";

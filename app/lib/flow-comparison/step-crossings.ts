@@ -14,15 +14,15 @@ interface Change {
   second: number;
 }
 
-/** Two warps are alike from this share of the larger on, or below this size, m. */
+/** Two warps are alike from this share of the larger on, or below this size, m, or where their uncertainties cover what parts them. */
 const ALIKE = 1e-6;
 const NOTHING = 1e-9;
 
 const PRINTED = 3;
 
 /**
- * Which of two flows warps more at the steps that both have: where they part from being the same, and where they change places. Sizes
- * alone, whichever way the edges lie.
+ * Which of two flows warps more at the steps that both have: where they part from being alike, and where they change places. Sizes
+ * alone, whichever way the edges lie; a difference that their expanded uncertainties cover tells neither from the other.
  * @returns null when they have no step in common at which both have a warp
  */
 export function stepCourse(first: Line["values"], second: Line["values"]) {
@@ -31,7 +31,7 @@ export function stepCourse(first: Line["values"], second: Line["values"]) {
     return value && other ? [{ place: index + 1, ...sizes(value, other) }] : [];
   });
   if (shared.length === 0) return null;
-  const apart = shared.filter(({ first: one, second: other }) => !alike(one, other));
+  const apart = shared.filter((at) => !alike(at));
   const changes: Change[] = apart.flatMap((at, n) => {
     const before = apart[n - 1];
     const leads = leader(at);
@@ -43,8 +43,10 @@ export function stepCourse(first: Line["values"], second: Line["values"]) {
 const sizes = (first: CourseValue, second: CourseValue) => ({
   first: Math.abs(first.warp),
   second: Math.abs(second.warp),
+  covered: Math.hypot(first.uncertainty, second.uncertainty),
 });
-const alike = (one: number, other: number) => Math.abs(one - other) <= Math.max(NOTHING, ALIKE * Math.max(one, other));
+const alike = ({ first, second, covered }: ReturnType<typeof sizes>) =>
+  Math.abs(first - second) <= Math.max(NOTHING, ALIKE * Math.max(first, second), covered);
 const leader = ({ first, second }: { first: number; second: number }) => (first > second ? "first" : "second");
 
 /** Every two flows in words, and the numbered places of the chart at which they have changed places. */
@@ -84,8 +86,8 @@ function courseSentence(
   if (!course) return `${both} have no step in common at which both lie with a warp of their own.`;
   const { shared, parts, changes } = course;
   const steps = shared.length === 1 ? "the one step" : `all ${count(shared.length)} steps`;
-  if (!parts) return `${both} warp the same at ${steps} that both have.`;
-  const same = shared[0]?.place === parts.place ? "" : `the same before ${nameOf(parts.place)}; `;
+  if (!parts) return `${both} warp alike at ${steps} that both have, within their uncertainties.`;
+  const same = shared[0]?.place === parts.place ? "" : `alike before ${nameOf(parts.place)}; `;
   const at = (change: { place: number; first: number; second: number }) => {
     const most = Math.max(change.first, change.second);
     const least = Math.min(change.first, change.second);
@@ -94,7 +96,7 @@ function courseSentence(
   const more = (leads: "first" | "second") => (leads === "first" ? first : second);
   const leads = more(leader(parts));
   if (changes.length === 0)
-    return `${both}: ${same}from ${at(parts)} on ${leads} warps more at every step that both have.`;
+    return `${both}: ${same}from ${at(parts)} on ${leads} warps more wherever they differ by more than their uncertainties.`;
   const said = changes.slice(0, PRINTED).map((change) => `from ${at(change)} on ${more(change.leads)}`);
   const rest = changes.length - said.length;
   const others = rest > 0 ? `, and ${count(rest)} times more` : "";

@@ -34,8 +34,24 @@ export function stepsChart(
     lines,
     limits: limitsAt(places, tools, tool),
     rolled: rolledStretches(flows, places),
+    tightest: tightestPlaces(flows, places, lines),
     crossings,
   };
+}
+
+/** Where each flow lies with the warp that decides. One that is of a hot moment stands on no line, which are of 25 °C. */
+function tightestPlaces(
+  flows: readonly ComparedFlow[],
+  places: Places,
+  lines: readonly ComparedCourseLine[],
+): StepsChart["tightest"] {
+  return flows.flatMap(({ letter, figures }, column) => {
+    const deciding = figures?.deciding;
+    if (!deciding?.limit || deciding.moment !== "atRoom") return [];
+    const index = places.findIndex(({ steps }) => steps[column]?.number === deciding.step.number);
+    const value = lines.find((line) => line.letter === letter)?.values[index];
+    return value ? [{ letter, x: index + 1, y: value.warp }] : [];
+  });
 }
 
 /** What the tool of each step takes: the strictest where flows use several, or the chosen tool's at every step. */

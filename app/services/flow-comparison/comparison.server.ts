@@ -65,16 +65,14 @@ interface Drawn {
   faults: ComparisonFaults;
 }
 
-/** Over silicon thickness where two flows or more are thinned, else along the steps; or as it is asked for. */
+/** Along the steps, where the step that decides is seen; over silicon thickness where that is asked for and a flow is thinned. */
 function drawnAlong(
   asked: ComparisonAsked,
   flows: readonly ComparedFlow[],
   { places, limits, tools }: Site & { places: readonly AlignedSteps<StepResult>[] },
 ): Drawn {
   const thinned = thinnedFlows(flows);
-  const [first, ...rest] = thinned;
-  const usual = asked.along === "" ? rest.length > 0 : asked.along === "thickness";
-  if (!usual || !first) {
+  if (asked.along !== "thickness" || thinned.length === 0) {
     const lines = courseLines(flows, places);
     const { marks, words } = stepCrossings(lines, (place) => {
       const at = places[place - 1];

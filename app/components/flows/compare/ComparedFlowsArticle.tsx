@@ -10,7 +10,7 @@ const SUMMARIES = {
   thickness:
     "Each step that thins is stopped on its way and the wafer let go. Upright stretch of a line: what is done between two thinnings. Filled dot: as thin as it gets. Upright bar: where it begins to curl; the shaded stretch is curled about one axis. Numbered ring: two warp alike. A line has a gap where the roll is past half a turn. Gravity is left out.",
   steps:
-    "Steps of all flows, paired by kind and name; a flow has no point where it has no such step or where tape or frame holds it flat. Red dash: what the tool of the step takes, the strictest where flows use several. Numbered ring: two flows have changed places since the step before. Shaded: rolled up, without a warp.",
+    "Steps of all flows, paired by kind and name; a flow has no point where it has no such step or where tape or frame holds it flat. Red dash: what the tool of the step takes, the strictest where flows use several. Filled dot: the warp that uses most of its tool’s limit. Numbered ring: two flows have changed places since the step before, by more than their uncertainties. Shaded: rolled up, without a warp.",
 };
 
 /** The answer, the lines and where they cross, what differs, and what moves each deciding warp. */

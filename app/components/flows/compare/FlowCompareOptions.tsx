@@ -7,8 +7,8 @@ import type { ComparedFlows, FlowComparisonView } from "#app/schemas/flow-compar
 
 const OWN = ["along", "scale", "from", "to", "tool"] as const;
 const ALONG = [
-  { value: "thickness", label: "Silicon thickness, let go" },
   { value: "steps", label: "Steps, as it lies" },
+  { value: "thickness", label: "Silicon thickness, let go" },
 ];
 const SCALES = [
   { value: "log", label: "Logarithmic" },
@@ -35,7 +35,7 @@ export function FlowCompareOptions({ view, compared }: { view: FlowComparisonVie
       <SelectField
         name="scale"
         label="Axes"
-        className="w-36"
+        className="w-44"
         defaultValue={asked.scale}
         blank={byThickness ? "Usual: logarithmic" : "Usual: linear"}
         options={SCALES}

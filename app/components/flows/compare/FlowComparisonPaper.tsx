@@ -10,7 +10,7 @@ interface Props extends Printed, Pick<FlowComparisonView, "asked" | "members"> {
 
 const NOTES = {
   thickness: "Filled dot: as thin as it gets. Bar: begins to curl. Ring: two warp alike.",
-  steps: "Dash: what the tool of the step takes. Ring: two have changed places.",
+  steps: "Dash: what the tool of the step takes. Filled dot: tightest. Ring: two have changed places.",
 };
 
 /** A comparison of flows on one page. */

@@ -1,7 +1,7 @@
 import { lineStyle } from "#app/components/comparison/line-styles.ts";
 import { warpAxis } from "#app/components/comparison/warp-axis.ts";
 import { coursePlot } from "#app/components/drawings/course-plot.ts";
-import type { Plot, PlotPoint } from "#app/components/drawings/plot.ts";
+import type { Plot, PlotMark, PlotPoint } from "#app/components/drawings/plot.ts";
 import { formatQuantity } from "#app/engine/units/format.ts";
 import { LEAST_DRAWN } from "#app/lib/stack-chart.ts";
 import type { StepsChart } from "#app/schemas/flow-comparison.ts";
@@ -9,7 +9,7 @@ import type { StepsChart } from "#app/schemas/flow-comparison.ts";
 const micrometres = (metres: number) => formatQuantity(metres, "length", { unit: "µm", significant: 3, trim: true });
 
 /** Flows in one plot of warp along the aligned steps: with sign on a linear axis, sizes alone on a logarithmic one. */
-export function stepsPlot({ scale, places, lines, limits, rolled, crossings }: StepsChart): Plot {
+export function stepsPlot({ scale, places, lines, limits, rolled, tightest, crossings }: StepsChart): Plot {
   const plot = coursePlot({
     places,
     lines: lines.map(({ letter, label, values }) => ({ id: letter, label, values, ...lineStyle(letter) })),
@@ -19,8 +19,24 @@ export function stepsPlot({ scale, places, lines, limits, rolled, crossings }: S
   });
   const signed: Plot = {
     ...plot,
+    x: { ...plot.x, title: "Step, as numbered in the table; edges up above 0, edges down below" },
+    series: plot.series.map((series) => (series.dash === "none" ? series : { ...series, endLabel: series.id })),
     shaded: rolled.map(({ from, to, label }) => ({ from: from - 0.5, to: to + 0.5, label })),
-    marks: crossings.map(({ x, y, number }) => ({ kind: "crossing", colourToken: "ink", x, y, text: String(number) })),
+    marks: [
+      ...tightest.map(({ letter, x, y }): PlotMark => ({
+        kind: "own",
+        colourToken: lineStyle(letter).colourToken,
+        x,
+        y,
+      })),
+      ...crossings.map(({ x, y, number }): PlotMark => ({
+        kind: "crossing",
+        colourToken: "ink",
+        x,
+        y,
+        text: String(number),
+      })),
+    ],
   };
   return scale === "linear" ? signed : sizesOf(signed);
 }
@@ -38,7 +54,7 @@ function sizesOf(plot: Plot): Plot {
   );
   return {
     ...plot,
-    x: { ...plot.x, title: "Step; sizes alone, whichever way the edges lie" },
+    x: { ...plot.x, title: "Step, as numbered in the table; sizes alone, whichever way the edges lie" },
     y: { scale: "log", ...axis, format: micrometres },
     series,
     marks: plot.marks?.map((mark) => ({ ...mark, ...size(mark) })),
