@@ -45,10 +45,12 @@ const MM = 96 / 25.4;
 export function ComparisonPaper(props: Props) {
   const { kind, asked, members, compared, plot, chartName, paper, caption, figureGroups } = props;
   const { width } = PAPERS[paper];
+  const answer = compared.summary.join(" ");
   const { groups, crossings, moreRows, moreCrossings } = paperRows(compared, {
-    members: members.length,
+    names: members.map(({ letter, name, program }) => `${letter} ${name} (${program})`),
     figureGroups,
     paper,
+    answer,
   });
   return (
     <>
@@ -56,7 +58,7 @@ export function ComparisonPaper(props: Props) {
       <OnePage
         paper={paper}
         kind={props.head}
-        answer={compared.summary.join(" ")}
+        answer={answer}
         title={`${capital(count(members.length))} ${kind.many} side by side`}
         documentType="Comparison"
         note={props.note}

@@ -12,7 +12,7 @@ const PAGES = [
 /** Takes the stored PDF out, and notes for which place. A plain form: what comes back is the file. */
 export function PrintForm({ view: { id, papers, staff }, paper }: { view: RevisionView; paper: Paper }) {
   return (
-    <form method="post" action={`${sheetPath(id)}/sheet.pdf`} className="flex max-w-160 flex-wrap items-end gap-3">
+    <form method="post" action={`${sheetPath(id)}/sheet.pdf`} className="flex max-w-160 flex-wrap items-start gap-x-3">
       {papers.length > 1 && (
         <SelectField
           name="leg"
@@ -32,7 +32,7 @@ export function PrintForm({ view: { id, papers, staff }, paper }: { view: Revisi
         <input type="hidden" name="pages" value="hands" />
       )}
       <TextField name="place" label="Where it will hang" maxLength={200} className="min-w-48 flex-1" />
-      <button type="submit" className="btn btn-primary">
+      <button type="submit" className="btn btn-primary mt-5">
         Take out the PDF
       </button>
     </form>
