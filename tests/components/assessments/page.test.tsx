@@ -76,7 +76,7 @@ describe("the assessment page", () => {
   });
 
   it("offers to run again and to change the flow to those only who may", () => {
-    expect(words(page())).toMatch(/Change the flow Compare Run again Print the sheet/);
+    expect(words(page())).toMatch(/Change the flow Compare Review Run again Print the sheet/);
     const reader = words(page({ head: { mayAssess: false } }));
     expect(reader).not.toMatch(/Run again|Change the flow/);
     expect(reader).toContain("Print the sheet");

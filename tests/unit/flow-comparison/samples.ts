@@ -1,7 +1,6 @@
 import type { FlowInput } from "#app/engine/flow/model.ts";
 import { defaultLimits } from "#app/engine/rules/limits.ts";
-import { letterOf } from "#app/lib/comparison/kinds.ts";
-import { flowFigures, type ComparedFlow, type FlowFigures } from "#app/lib/flow-comparison/figures.ts";
+import { flowFigures, type FlowFigures } from "#app/lib/flow-comparison/figures.ts";
 import type { AssessmentResult } from "#app/schemas/assessment-result.ts";
 import { compute } from "#app/services/assessments/compute.ts";
 import { demoFlow } from "../../fixtures/demo-flow-input.ts";
@@ -24,22 +23,3 @@ export function figuresOf(name: string): FlowFigures {
   known.set(name, figures);
   return figures;
 }
-
-/** A flow as it is compared; without figures it cannot be walked. */
-export function comparedAs(letter: string, name: string, figures: FlowFigures | null): ComparedFlow {
-  return {
-    id: `id-${letter}`,
-    letter,
-    name,
-    program: { name },
-    changedAt: "2026-03-02T08:00:00.000Z",
-    silicon: { name: "Silicon (001), 200 mm, 725 µm", diameter: 0.2 },
-    assessed: null,
-    figures,
-    reason: figures ? null : "no silicon is left",
-  };
-}
-
-/** Demo flows side by side, A first. */
-export const sideBySide = (...names: string[]) =>
-  names.map((name, column) => comparedAs(letterOf(column), name, figuresOf(name)));
