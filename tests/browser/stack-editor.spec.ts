@@ -128,6 +128,29 @@ test.describe("an engineer", () => {
     await expect(drawn).toBeFocused();
   });
 
+  test("keeps a film that is typed into before the page has drawn what follows from it", async ({ page }) => {
+    await fillNew(page, nameFor("haste"));
+    const slow = await page.context().newCDPSession(page);
+    await slow.send("Emulation.setCPUThrottlingRate", { rate: 6 });
+    // As quick as any hand or paste can be: the field is typed into as soon as it is there.
+    await page.evaluate(async () => {
+      const add = [...document.querySelectorAll("button")].find(
+        ({ textContent }) => textContent === "Add a film on top",
+      );
+      const summaries = () => document.querySelectorAll("details[id^=layer-]").length;
+      add?.click();
+      while (summaries() < 3) await new Promise((done) => setTimeout(done));
+      const field = document.querySelector<HTMLInputElement>('[name="layers[0].thickness.value"]');
+      const write = Object.getOwnPropertyDescriptor(HTMLInputElement.prototype, "value")?.set;
+      write?.call(field, "3 um");
+      field?.dispatchEvent(new Event("input", { bubbles: true }));
+    });
+    await slow.send("Emulation.setCPUThrottlingRate", { rate: 1 });
+    await inOrder(page, /^Film not chosen/, POLYMER, COPPER);
+    await expect(field(page, "layers[0].thickness.value")).toHaveValue("3 um");
+    await expect(field(page, "layers[2].thickness.value")).toHaveValue("5um");
+  });
+
   test("drags a film in the cut, through the silicon too", async ({ page }) => {
     // So that all of the cut is within reach of the mouse.
     await page.setViewportSize({ width: 1440, height: 1400 });

@@ -24,7 +24,7 @@ import { focusField, STACK_FORM } from "./stack-fields.ts";
 import { StackPanes } from "./StackPanes.tsx";
 import { StackToolBar } from "./StackToolBar.tsx";
 import type { CutPartOf } from "./stack-cut-layers.ts";
-import { useKeptDraft } from "./use-kept-draft.ts";
+import { NEW, useKeptDraft } from "./use-kept-draft.ts";
 import { useSaveOnceSaid } from "./use-save-once-said.ts";
 import { useLayerEdits } from "./use-layer-edits.ts";
 import { useLiveEstimate } from "./use-live-estimate.ts";
@@ -71,10 +71,8 @@ export function StackEditor(props: Props) {
   const said = JSON.stringify(typed);
   const opened = useMemo(() => JSON.stringify(stackText(basis.text)), [basis]);
   const history = useStackHistory(said);
-  // The field that is typed into comes first; what follows from it is drawn in pieces that the next key goes before.
-  const followed = useDeferredValue(said);
-  const draft = useStackDraft(history.typing ? followed : said, choices);
-  const kept = useKeptDraft({ person, record: stackId ?? "new", version: basis.version, opened, said, saved });
+  const draft = useStackDraft(said, choices, history.typing);
+  const kept = useKeptDraft({ person, record: stackId ?? NEW, version: basis.version, opened, said, saved });
   const [words, setWords] = useState("");
   const [filmFor, setFilmFor] = useState<number | null>(null);
   const [at, setAt] = useState(view.at);

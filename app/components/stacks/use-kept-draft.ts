@@ -5,9 +5,12 @@ import { draftName, dropDraft, keepDraft, keptDrafts, stillHere, type KeptDraft 
 /** Typing rests this long before it is kept, ms. */
 const REST = 400;
 
+/** What a stack goes by that is not stored yet. */
+export const NEW = "new";
+
 interface Now {
   person: string;
-  /** id of the stack, or 'new' */
+  /** id of the stack, or `NEW` */
   record: string;
   version: number | null;
   /** the stack as it was opened, and as it is said now, as the JSON of its text */
@@ -29,9 +32,9 @@ export function useKeptDraft({ person, record, version, opened, said, saved }: N
   // What was there when the page was opened: what is typed from now on is not offered back to who types it.
   const found = useMemo(() => (scripted ? keptDrafts(person, record) : []), [scripted, person, record]);
   useEffect(() => {
-    // Saved since, by a window that was closed before it could take its draft away.
-    for (const { name, said: kept } of found) if (kept === opened) dropDraft(name);
-  }, [found, opened]);
+    // Saved since: as a new stack, or by a window that was closed before it could take its draft away.
+    for (const draft of [...found, ...keptDrafts(person, NEW)]) if (draft.said === opened) dropDraft(draft.name);
+  }, [found, opened, person]);
   useEffect(() => {
     if (saved || said === opened) {
       if (own.current !== null) dropDraft(own.current);
