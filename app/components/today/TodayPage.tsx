@@ -13,6 +13,7 @@ import { TodayPrograms } from "./TodayPrograms.tsx";
 import { TodayRow } from "./TodayRow.tsx";
 import { TodayScans } from "./TodayScans.tsx";
 import { TodaySection } from "./TodaySection.tsx";
+import { SheetsOfLate, SheetsThatWait } from "./TodaySheets.tsx";
 
 interface Props {
   view: TodayView;
@@ -40,6 +41,7 @@ export function TodayPage({ view, told }: Props) {
               {demo?.here === false && <LoadDemo />}
             </div>
           )}
+          <SheetsThatWait sheets={view.sheets} now={view.now} />
           {decisions.total > 0 && (
             <TodaySection title="Needs a decision" remark="oldest first" more={moreOf(decisions)}>
               <ul>
@@ -78,6 +80,7 @@ export function TodayPage({ view, told }: Props) {
               </ul>
             </TodaySection>
           )}
+          <SheetsOfLate sheets={view.sheets} />
           {mayAssess && scans}
           {decisions.total + outOfDate.total + view.scans.length > 0 && (
             <p className="text-label text-quiet">Bow lines on this page ×{exaggeration}; rolled wafers ×1.</p>

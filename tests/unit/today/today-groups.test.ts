@@ -1,7 +1,7 @@
 import { describe, expect, it } from "vitest";
-import { groupFlows, headline, SHOWN } from "#app/lib/today-groups.ts";
+import { groupFlows, headline, headlineForGuest, SHOWN } from "#app/lib/today-groups.ts";
 import type { Outcome } from "#app/engine/vocabulary.ts";
-import type { TodayFlow } from "#app/schemas/today.ts";
+import type { TodayFlow, TodaySheets } from "#app/schemas/today.ts";
 
 const day = (number: number) => `2026-11-${String(number).padStart(2, "0")}T08:00:00.000Z`;
 
@@ -68,10 +68,27 @@ describe("the sentence at the top", () => {
   ])("%i, %i and %i", (decisions, outOfDate, notAssessed, sentence) => {
     expect(
       headline({
+        sheets: { toRelease: { total: 0 }, toSign: { total: 0 }, returned: { total: 0 } } as TodaySheets,
         decisions: { total: decisions },
         outOfDate: { total: outOfDate },
         notAssessed: { total: notAssessed },
       }),
     ).toBe(sentence);
+  });
+
+  it("begins with what waits for the reader alone", () => {
+    const sheets = { toRelease: { total: 2 }, toSign: { total: 1 }, returned: { total: 1 } } as TodaySheets;
+    const none = { total: 0 };
+    expect(headline({ sheets, decisions: { total: 1 }, outOfDate: none, notAssessed: none })).toBe(
+      "Two sheets wait for your review, one deviation waits for your signature, one sheet was returned to you and one flow needs a decision.",
+    );
+  });
+
+  it.each([
+    [0, "No sheet is in force for your programs."],
+    [1, "One sheet is in force for your programs."],
+    [3, "Three sheets are in force for your programs."],
+  ])("of a guest with %i sheets", (inForce, sentence) => {
+    expect(headlineForGuest(inForce)).toBe(sentence);
   });
 });
