@@ -24,6 +24,7 @@ const NEVER_TAKEN_OUT = [
   "sheet",
   "sheet_revision",
   "deviation",
+  "delegation",
 ];
 /** One row that the migration puts in. */
 const READ_AND_CHANGE = ["site_setting"];

@@ -29,6 +29,7 @@ const PROGRAM_TABLES = [
   "sheet_comment",
   "deviation",
   "sheet_print",
+  "delegation",
   "mail_outbox",
 ];
 const SITE_TABLES = [
