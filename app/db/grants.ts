@@ -16,6 +16,8 @@ const ADD_ONLY = [
   "sheet_file",
   "sheet_comment",
   "sheet_print",
+  "lot_sheet",
+  "floor_entry",
 ];
 const NEVER_TAKEN_OUT = [
   "film_stress_value",
@@ -24,6 +26,8 @@ const NEVER_TAKEN_OUT = [
   "sheet",
   "sheet_revision",
   "deviation",
+  "lot_hold",
+  "step_stop",
 ];
 /** One row that the migration puts in. */
 const READ_AND_CHANGE = ["site_setting"];

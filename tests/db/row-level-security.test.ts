@@ -29,6 +29,10 @@ const PROGRAM_TABLES = [
   "sheet_comment",
   "deviation",
   "sheet_print",
+  "lot_sheet",
+  "floor_entry",
+  "lot_hold",
+  "step_stop",
   "mail_outbox",
 ];
 const SITE_TABLES = [
