@@ -113,7 +113,11 @@ export default [
       index("routes/_app/predictions/predictions.tsx"),
       route("points.csv", "routes/_app/predictions/points-csv.ts"),
     ]),
-    ...prefix("lots", [index("routes/_app/lots/list.tsx"), route(":lotId", "routes/_app/lots/lot.tsx")]),
+    ...prefix("lots", [
+      index("routes/_app/lots/list.tsx"),
+      route("new", "routes/_app/lots/new.tsx"),
+      route(":lotId", "routes/_app/lots/lot.tsx"),
+    ]),
     route("import-profiles", "routes/_app/import-profiles.tsx"),
     ...prefix("wafers/:waferId", [
       index("routes/_app/wafers/wafer.tsx"),

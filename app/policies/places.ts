@@ -58,6 +58,7 @@ const WITHIN: (Page & { open: (actor: Actor) => boolean })[] = [
   { name: "What would change?", path: "/assessments/change-request", also: "change request", open: seesWork },
   { name: "Draft sheets", path: "/sheets/drafts", also: "print a draft", open: seesWork },
   { name: "Lots", path: "/lots", also: "wafers", open: seesWork },
+  { name: "New lots", path: "/lots/new", also: "create, import a table of lots", open: mayUpload },
   { name: "Import scans", path: "/scans/import", also: "upload files", open: mayUpload },
   { name: "Upload one pair of scans", path: "/scans/new", open: mayUpload },
   { name: "Files that wait", path: "/scans/waiting", also: "scans without a partner", open: seesWork },

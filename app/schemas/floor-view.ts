@@ -84,3 +84,28 @@ export interface FloorLot {
   /** ISO, when all this was so */
   checkedAt: string;
 }
+
+/** Where one part of a lot is in its flow. */
+export interface LotPlace {
+  leg: number;
+  name: string;
+  /** null when its last step is done */
+  here: { number: number; title: string; underWay: boolean } | null;
+  done: number;
+  total: number;
+  /** steps that were passed without a word */
+  missing: number[];
+}
+
+/** What the desk sees of a lot on the floor. */
+export interface LotDesk {
+  pin: PinnedSheet | null;
+  parts: LotPlace[];
+  blocks: FloorBlock[];
+  /** revisions that it was on before, newest first */
+  before: PinnedSheet[];
+  /** released revisions that it can be put on, for who may put it there */
+  choices: { id: string; name: string }[];
+  mayAssign: boolean;
+  mayHold: boolean;
+}

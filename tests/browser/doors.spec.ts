@@ -113,6 +113,7 @@ const DOORS: Record<string, string> = {
   "/predictions": "302 403 200 200 200 200 403",
   "/predictions/points.csv": "302 403 200 200 200 200 403",
   "/lots": "302 403 200 200 200 200 403",
+  "/lots/new": "302 403 200 200 200 200 403",
   "/lots/:lotId": "302 404 200 200 200 200 404",
   "/import-profiles": "302 403 200 200 200 200 403",
   "/demo": "302 403 403 403 200 403 403",

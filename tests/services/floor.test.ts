@@ -266,3 +266,51 @@ describe("a newer revision", () => {
     await expect(insert(randomUUID())).rejects.toThrow("is or was on");
   });
 });
+
+describe("lots that are made", () => {
+  const making = () => import("#app/services/wafers/new-lots.server.ts");
+  const standing = () => import("#app/services/wafers/wafer-status.server.ts");
+
+  test("come with their wafers, all of them or none", LONG, async () => {
+    const { makeLots } = await making();
+    const wafers = "lot,slot,wafer\nT-0500,1,W01\nT-0500,2,W02\nT-0501,1,W01";
+    await expect(makeLots(guest, { program: tern, name: "", wafers })).rejects.toEqual(status(404));
+    expect(await makeLots(technician, { program: tern, name: "", wafers })).toEqual({ outcome: "stored", only: null });
+    const again = await makeLots(technician, { program: tern, name: "", wafers: "lot\nT-0502\nt-0501" });
+    expect(again).toMatchObject({ outcome: "refused", faults: [expect.stringContaining("already a lot t-0501")] });
+    expect(await asOwner(database, "select id from lot where name = 'T-0502'")).toEqual([]);
+  });
+
+  test("have wafers that stand somewhere", async () => {
+    const { setWaferStatus } = await standing();
+    const { floorLot } = await looking();
+    const rows = await asOwner<{ id: string; lot: string }>(
+      database,
+      "select w.id, w.lot_id as lot from wafer w join lot l on l.id = w.lot_id where l.name = 'T-0500' order by slot",
+    );
+    const [first] = rows;
+    await expect(setWaferStatus(guest, first?.lot, { wafers: [first?.id ?? ""], status: "broken" })).rejects.toEqual(
+      status(404),
+    );
+    await setWaferStatus(technician, first?.lot, { wafers: [first?.id ?? ""], status: "broken" });
+    expect((await floorLot(technician, first?.lot, null)).wafers).toEqual({ total: 2, inLine: 1 });
+    const audit = await asOwner(
+      database,
+      "select 1 from audit_event where subject_id = ? and field = 'status' and actor_id = ?",
+      [first?.id, technician.actor.id],
+    );
+    expect(audit).toHaveLength(1);
+  });
+});
+
+describe("what the desk sees", () => {
+  test("is the sheet, the place in the flow and the way to move the lot, for who may", LONG, async () => {
+    const { lotDesk } = await import("#app/services/floor/lot-desk.server.ts");
+    const desk = await lotDesk(engineer, lot);
+    expect(desk).toMatchObject({ mayAssign: true, mayHold: false, pin: { letter: "B", state: "withdrawn" } });
+    expect(desk.parts).toMatchObject([{ here: { number: 3, underWay: true }, missing: [] }]);
+    expect(desk.before.map(({ letter }) => letter)).toEqual(["A"]);
+    expect((await lotDesk(technician, lot)).choices).toEqual([]);
+    await expect(lotDesk(guest, lot)).rejects.toEqual(status(404));
+  });
+});
