@@ -23,6 +23,13 @@ export default [
     route("stacks/compare/print", "routes/_print/comparison.tsx"),
     route("stacks/:stackId/sweep/print", "routes/_print/sweep.tsx"),
   ]),
+  layout("routes/_floor/layout.tsx", [
+    ...prefix("floor", [
+      index("routes/_floor/find.tsx"),
+      route("lots/:lotId", "routes/_floor/lot.tsx"),
+      route("lots/:lotId/steps/:number", "routes/_floor/step.tsx"),
+    ]),
+  ]),
   layout("routes/_app/layout.tsx", [
     index("routes/_app/today.tsx"),
     ...prefix("films", [

@@ -15,6 +15,7 @@ const ALL: (Place & { open: (actor: Actor) => boolean })[] = [
   { name: "Carriers & bonds", path: "/carriers", open: (actor) => mayOnSite(actor, "see the library") },
   { name: "Scans", path: "/scans", open: (actor) => programsWhere(actor, "see the work").length > 0 },
   { name: "Sheets", path: "/sheets", open: (actor) => programsWhere(actor, "see released sheets").length > 0 },
+  { name: "Floor", path: "/floor", open: (actor) => programsWhere(actor, "work on the floor").length > 0 },
   { name: "Method", path: "/method", open: () => true },
   { name: "Settings", path: "/settings", open: (actor) => mayOnSite(actor, "edit site settings") },
 ];

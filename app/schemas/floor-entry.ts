@@ -1,15 +1,10 @@
 import { z } from "zod";
+import { GRAVITY, MEASURED_ON, MEASURED_SIDES } from "#app/lib/floor/measured-how.ts";
 import { optionalQuantity, quantity } from "./quantity.ts";
 import { RULES } from "./ranges.ts";
 
 /** What somebody on the floor can say of a lot. */
-export const FLOOR_KINDS = ["acknowledged", "started", "done", "measured", "observed"] as const;
-export type FloorKind = (typeof FLOOR_KINDS)[number];
-
-/** What holds a wafer while it is measured: only like is compared with like. */
-export const MEASURED_ON = ["three pins", "table or chuck, vacuum off", "film frame", "carrier, as a pair"] as const;
-export const MEASURED_SIDES = ["device side", "back side"] as const;
-export const GRAVITY = ["taken out", "left in", "not known"] as const;
+export type FloorKind = "acknowledged" | "started" | "done" | "measured" | "observed";
 
 const words = (message: string, most: number) =>
   z.string(message).trim().min(1, message).max(most, `Keep it under ${most} characters.`);

@@ -109,3 +109,21 @@ export interface LotDesk {
   mayAssign: boolean;
   mayHold: boolean;
 }
+
+/** A lot as the floor finds it. */
+export interface FoundLot {
+  id: string;
+  name: string;
+  program: string;
+  /** number and letter of its sheet; null where it is on none */
+  sheet: string | null;
+}
+
+export interface FoundLots {
+  query: string;
+  /** the one lot of that very name; then there is nothing to choose */
+  exact: string | null;
+  rows: FoundLot[];
+  /** the lots that this person entered something of, newest first */
+  mine: FoundLot[];
+}

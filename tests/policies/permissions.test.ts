@@ -106,6 +106,7 @@ test("an engineer is offered the places in the order of the job", () => {
     "Carriers & bonds",
     "Scans",
     "Sheets",
+    "Floor",
     "Method",
   ]);
 });

@@ -50,6 +50,11 @@ export function LotOnSheet({ id, desk, answer, holdId }: Props) {
               <Place key={part.leg} part={part} only={parts.length === 1} />
             ))}
           </ul>
+          <p className="mt-2">
+            <a href={`/floor/lots/${id}`} className="link">
+              Open it as the floor sees it
+            </a>
+          </p>
         </HungSection>
       )}
       <HungSection title="Holds and stops">
