@@ -10,16 +10,21 @@ const ACTION =
 
 /** What can be done at a step, each at least 20 mm high. Stopping stands apart, so that a slip does not hit it. */
 export function FloorActions(props: FloorStepProps & { blocked: boolean }) {
-  const { lot, sheet, step } = props;
+  const { lot, sheet, step, deed } = props;
   const last = sheet.entries.find(({ step: at, content }) => at === step.number && content.kind === "measured");
   const to = (deed: "measure" | "observe" | "stop" | "hold") => floorPath(lot.id, step.number, sheet.leg, deed);
   return (
     <div
       role="group"
       aria-label="What can be done here"
-      className="flex flex-col border-ink max-tablet:border-t tablet:w-75 tablet:border-l"
+      className="flex-none flex-col border-ink max-tablet:contents tablet:flex tablet:w-75 tablet:overflow-y-auto tablet:border-l"
     >
-      <MainAction {...props} />
+      {/* On a phone it stays at the foot of what is read. */}
+      {deed === null && (
+        <div className="border-ink bg-surface max-tablet:sticky max-tablet:bottom-0 max-tablet:border-t">
+          <MainAction {...props} />
+        </div>
+      )}
       <a href={to("measure")} className={`${ACTION} border-b border-line`}>
         Record a reading
         <span className="text-lead font-normal text-quiet">

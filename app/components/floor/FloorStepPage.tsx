@@ -30,10 +30,11 @@ export function FloorStepPage({
   const { lot, sheet, step, deed } = props;
   const blocks = sheet.blocks.filter((block) => block.step === null || block.step === step.number);
   return (
-    <div className="flex min-h-dvh flex-col">
+    <div className="flex min-h-dvh flex-col tablet:h-dvh">
       <FloorSheetHead lot={lot} sheet={sheet} />
-      <div className="flex flex-1 flex-col tablet:flex-row">
-        <main id="main" className="min-w-0 flex-1 px-4 py-5 tablet:px-6">
+      <div className="flex min-h-0 flex-1 flex-col tablet:flex-row">
+        {/* On a tablet it scrolls by itself, so that what can be done stays in view. */}
+        <main id="main" tabIndex={0} className="min-w-0 flex-1 overflow-y-auto px-4 py-5 tablet:px-6">
           <FloorRefusal sentence={answer?.sentence ?? null} />
           <FloorBlocks blocks={blocks} lot={lot.id} />
           {deed === null ? (
@@ -55,8 +56,8 @@ export function FloorStepPage({
 
 function Notes({ sheet, step }: { sheet: FloorSheet; step: FloorStep }) {
   return (
-    <div className="mt-4 grid gap-x-6 gap-y-3 text-lead tablet:grid-cols-2">
-      <section>
+    <div className="mt-4 grid gap-x-6 gap-y-3 tablet:grid-cols-2">
+      <section className="text-lead">
         <h2 className="font-semibold">Watch for here</h2>
         <ul className="list-disc pl-5">
           {[step.touch, ...step.doNot, ...step.runs].map((text) => (
@@ -65,7 +66,7 @@ function Notes({ sheet, step }: { sheet: FloorSheet; step: FloorStep }) {
         </ul>
       </section>
       <section>
-        <h2 className="font-semibold">Always</h2>
+        <h2 className="text-lead font-semibold">Always</h2>
         <ul className="list-disc pl-5">
           {sheet.cautions.map(({ sign, text }) => (
             <li key={sign}>{text}</li>

@@ -1,6 +1,6 @@
 import { BowLine } from "#app/components/drawings/BowLine.tsx";
 import { SUPPORT_SIGNS } from "#app/components/drawings/severity.ts";
-import { Swatch } from "#app/components/drawings/Swatch.tsx";
+import { HatchBox } from "#app/components/drawings/HatchBox.tsx";
 import type { FloorStep } from "#app/lib/floor/floor-steps.ts";
 import type { FloorSheet } from "#app/schemas/floor-view.ts";
 
@@ -25,19 +25,28 @@ export function StepCommand({ sheet, step }: { sheet: FloorSheet; step: FloorSte
       </p>
       <h1 className="text-answer font-medium wrap-anywhere">{title}</h1>
       <div className={`mt-3 flex items-stretch border-2 bg-raised ${stopped ? "border-stop" : EDGES[planned]}`}>
-        <span className="flex w-14 flex-none items-center justify-center border-r border-line">
-          <Swatch level={level} width={48} height={96} scale={1.04} />
+        <span className="relative w-14 flex-none overflow-hidden">
+          <svg
+            className="absolute inset-0 size-full"
+            viewBox="0 0 56 160"
+            preserveAspectRatio="xMidYMin slice"
+            aria-hidden
+          >
+            <HatchBox level={level} x={0} y={-1} width={57} height={400} scale={1.04} />
+          </svg>
         </span>
         <div className="min-w-0 p-4 tablet:px-5">
           <p className="text-answer font-semibold tablet:text-floor">{command}</p>
           <p className="text-lead tablet:text-figure">{why}</p>
-          <p className="mt-1 text-lead">
-            {SUPPORT_SIGNS[planned].word}: {step.heldBy}
-          </p>
+          {step.heldBy !== planned && (
+            <p className="mt-1 text-lead">
+              {SUPPORT_SIGNS[planned].word}: {step.heldBy}
+            </p>
+          )}
         </div>
       </div>
-      <div className="mt-4 flex flex-wrap items-center gap-x-6 gap-y-2">
-        <figure>
+      <div className="mt-3 grid items-center gap-x-6 gap-y-2 tablet:grid-cols-[minmax(0,350px)_minmax(0,1fr)]">
+        <figure className="min-w-0">
           <BowLine
             diameter={sheet.diameter}
             shape={bow.shape}
@@ -63,7 +72,7 @@ export function StepCommand({ sheet, step }: { sheet: FloorSheet; step: FloorSte
           </p>
         </div>
       </div>
-      <dl className="mt-4 grid grid-cols-2 border-y border-line text-lead tablet:grid-cols-4">
+      <dl className="mt-3 grid grid-cols-2 border-y border-line text-lead tablet:grid-cols-4">
         <Fact name="Silicon" value={step.silicon} />
         <Fact name="Hottest here" value={step.hottest} />
         <Fact name="Side up" value={step.sideUp} />
@@ -83,7 +92,7 @@ export function StepCommand({ sheet, step }: { sheet: FloorSheet; step: FloorSte
 
 function Fact({ name, value }: { name: string; value: string }) {
   return (
-    <div className="px-3 py-2 first:pl-0">
+    <div className="py-2 pr-3">
       <dt className="text-body text-quiet">{name}</dt>
       <dd className="text-figure font-semibold">{value}</dd>
     </div>

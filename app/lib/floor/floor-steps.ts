@@ -61,6 +61,8 @@ function floorStep(step: StepResult, before: StepResult | null, stopped: boolean
   const bond = result.bonds.find(({ fromStep, toStep }) => fromStep <= number && number <= toStep);
   return {
     ...view,
+    // That it is at this step is plain from where it stands.
+    hottest: view.hottest.replace(/, steps? \d+$/, ""),
     ...floorCommand(step, before, stopped),
     number,
     title,
