@@ -23,6 +23,13 @@ export default [
     route("stacks/compare/print", "routes/_print/comparison.tsx"),
     route("stacks/:stackId/sweep/print", "routes/_print/sweep.tsx"),
   ]),
+  layout("routes/_floor/layout.tsx", [
+    ...prefix("floor", [
+      index("routes/_floor/find.tsx"),
+      route("lots/:lotId", "routes/_floor/lot.tsx"),
+      route("lots/:lotId/steps/:number", "routes/_floor/step.tsx"),
+    ]),
+  ]),
   layout("routes/_app/layout.tsx", [
     index("routes/_app/today.tsx"),
     ...prefix("films", [
@@ -113,7 +120,11 @@ export default [
       index("routes/_app/predictions/predictions.tsx"),
       route("points.csv", "routes/_app/predictions/points-csv.ts"),
     ]),
-    ...prefix("lots", [index("routes/_app/lots/list.tsx"), route(":lotId", "routes/_app/lots/lot.tsx")]),
+    ...prefix("lots", [
+      index("routes/_app/lots/list.tsx"),
+      route("new", "routes/_app/lots/new.tsx"),
+      route(":lotId", "routes/_app/lots/lot.tsx"),
+    ]),
     route("import-profiles", "routes/_app/import-profiles.tsx"),
     ...prefix("wafers/:waferId", [
       index("routes/_app/wafers/wafer.tsx"),

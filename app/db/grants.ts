@@ -16,6 +16,8 @@ const ADD_ONLY = [
   "sheet_file",
   "sheet_comment",
   "sheet_print",
+  "lot_sheet",
+  "floor_entry",
 ];
 const NEVER_TAKEN_OUT = [
   "film_stress_value",
@@ -25,6 +27,8 @@ const NEVER_TAKEN_OUT = [
   "sheet_revision",
   "deviation",
   "delegation",
+  "lot_hold",
+  "step_stop",
 ];
 /** One row that the migration puts in. */
 const READ_AND_CHANGE = ["site_setting"];

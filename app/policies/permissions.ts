@@ -14,6 +14,10 @@ export const PROGRAM_PERMISSIONS = {
   "comment in a review": ["technician", "engineer", "process owner", "shift lead"],
   "record deviations": ["engineer", "process owner"],
   "release, return and withdraw sheets": ["process owner"],
+  "assign sheets to lots": ["engineer", "process owner"],
+  "work on the floor": ["technician", "engineer", "process owner", "shift lead"],
+  "hold lots and clear what the shift can": ["shift lead", "process owner"],
+  "clear every hold and stop": ["process owner"],
 } as const satisfies Record<string, readonly (ProgramRole | SiteRole)[]>;
 
 /** Things done to what the whole site shares. A program role counts when it is held in any program. */

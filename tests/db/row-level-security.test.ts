@@ -30,6 +30,10 @@ const PROGRAM_TABLES = [
   "deviation",
   "sheet_print",
   "delegation",
+  "lot_sheet",
+  "floor_entry",
+  "lot_hold",
+  "step_stop",
   "mail_outbox",
 ];
 const SITE_TABLES = [

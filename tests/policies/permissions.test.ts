@@ -29,6 +29,10 @@ const PROGRAM_TABLE: Record<keyof typeof PROGRAM_PERMISSIONS, string> = {
   "comment in a review": "- y y y y -",
   "record deviations": "  - - - y y -",
   "release, return and withdraw sheets": "- - - - y -",
+  "assign sheets to lots": "- - - y y -",
+  "work on the floor": "  - y y y y -",
+  "hold lots and clear what the shift can": "- - y - y -",
+  "clear every hold and stop": "- - - - y -",
 };
 const SITE_TABLE: Record<keyof typeof SITE_PERMISSIONS, string> = {
   "see the library": "    - y y y y y",
@@ -103,6 +107,7 @@ test("an engineer is offered the places in the order of the job", () => {
     "Carriers & bonds",
     "Scans",
     "Sheets",
+    "Floor",
     "Method",
   ]);
 });

@@ -52,6 +52,10 @@ import { SheetFile } from "./sheet-file.ts";
 import { SheetComment } from "./sheet-comment.ts";
 import { Deviation } from "./deviation.ts";
 import { SheetPrint } from "./sheet-print.ts";
+import { FloorEntry } from "./floor-entry.ts";
+import { LotHold } from "./lot-hold.ts";
+import { LotSheet } from "./lot-sheet.ts";
+import { StepStop } from "./step-stop.ts";
 
 /** Every entity, listed by hand: the ORM finds nothing by itself. */
 export const entities = [
@@ -99,6 +103,10 @@ export const entities = [
   Wafer,
   WaferScan,
   WaferMeasurement,
+  LotSheet,
+  FloorEntry,
+  LotHold,
+  StepStop,
   Scan,
   Job,
   RecentVisit,
