@@ -1,4 +1,4 @@
-import type { TodayFlow, TodayGroup, TodaySheets } from "#app/schemas/today.ts";
+import type { TodayFlow, TodayGroup, TodayLots } from "#app/schemas/today.ts";
 import { count } from "./count-words.ts";
 
 /** Rows that a group shows; the rest is counted and one link away. */
@@ -40,16 +40,19 @@ function group<Row>(rows: Row[], since: (row: Row) => string): TodayGroup<Row> {
 }
 
 interface Waiting extends Record<keyof TodayGroups, { total: number }> {
-  sheets: Pick<TodaySheets, "toRelease" | "toSign" | "returned">;
+  sheets: Record<"toRelease" | "toSign" | "returned", { total: number }>;
+  lots: Record<keyof TodayLots, { total: number }>;
 }
 
 /** What waits, in one sentence, what waits for the reader alone first: 'One sheet waits for your review and two flows need a decision.' */
-export function headline({ sheets, decisions, outOfDate, notAssessed }: Waiting): string {
+export function headline({ sheets, lots, decisions, outOfDate, notAssessed }: Waiting): string {
   const { toRelease, toSign, returned } = sheets;
   const parts = [
     part(toRelease.total, "sheet waits for your review", "sheets wait for your review"),
     part(toSign.total, "deviation waits for your signature", "deviations wait for your signature"),
     part(returned.total, "sheet was returned to you", "sheets were returned to you"),
+    part(lots.blocked.total, "lot or step is held", "lots or steps are held"),
+    part(lots.toMove.total, "lot is on an old sheet", "lots are on old sheets"),
     part(decisions.total, "flow needs a decision", "flows need a decision"),
     part(outOfDate.total, "assessment is out of date", "assessments are out of date"),
     part(notAssessed.total, "flow is not assessed yet", "flows are not assessed yet"),

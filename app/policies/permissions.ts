@@ -37,7 +37,11 @@ export type ProgramPermission = keyof typeof PROGRAM_PERMISSIONS;
 export type SitePermission = keyof typeof SITE_PERMISSIONS;
 
 /** What a process owner hands over to whoever stands in for them, and nothing more. */
-const HANDED_OVER: readonly ProgramPermission[] = ["release, return and withdraw sheets"];
+const HANDED_OVER: readonly ProgramPermission[] = [
+  "release, return and withdraw sheets",
+  "hold lots and clear what the shift can",
+  "clear every hold and stop",
+];
 
 const allows = (roles: readonly string[], held: string | null | undefined) =>
   typeof held === "string" && roles.includes(held);

@@ -78,6 +78,26 @@ export interface TodaySheets {
   inForce: number;
 }
 
+/** A lot that does not go on, as Today lists it. */
+export interface TodayLot {
+  id: string;
+  lotId: string;
+  title: string;
+  words: string;
+  program: string;
+  /** ISO date-time since which it stands so */
+  at: string;
+  /** whether this person may do something about it */
+  mine: boolean;
+}
+
+export interface TodayLots {
+  /** open holds of lots and stops of steps, longest first */
+  blocked: TodayGroup<TodayLot>;
+  /** on a sheet that is not in force any more, for who may move them */
+  toMove: TodayGroup<TodayLot>;
+}
+
 /** What Today shows to a person. A guest has programs and released sheets alone. */
 export interface TodayView {
   now: string;
@@ -89,6 +109,7 @@ export interface TodayView {
   outOfDate: TodayGroup<TodayAssessed>;
   notAssessed: TodayGroup<TodayFlow>;
   sheets: TodaySheets;
+  lots: TodayLots;
   scans: ScanRow[];
   programs: TodayProgram[];
   /** for who may load and remove it: whether the demo is on the site, with its programs that this person belongs to */

@@ -20,8 +20,9 @@ export function DelegatesPage({ rows, choices, done, lastResult }: Props) {
       <PageHead title="Delegates" remark="Who releases sheets while a process owner is away" />
       {done && !lastResult && <Notice kind="done" title={DONE[done]} />}
       <p className="max-w-160 pb-4">
-        Whoever stands in for a process owner releases, returns and withdraws sheets of that program and signs
-        deviations, and nothing else of theirs. Never one’s own work, nor that of the person stood in for.
+        Whoever stands in for a process owner releases, returns and withdraws sheets of that program, signs deviations,
+        holds lots and clears holds and stops, and nothing else of theirs. Never one’s own work, nor that of the person
+        stood in for.
       </p>
       {choices.length > 0 && <NameDelegate key={rows.length} choices={choices} lastResult={lastResult} />}
       {rows.length === 0 ? (

@@ -8,6 +8,7 @@ import { LoadDemo } from "#app/components/demo/LoadDemo.tsx";
 import { FirstSteps } from "./FirstSteps.tsx";
 import { TodayAssessedRow } from "./TodayAssessedRow.tsx";
 import { DemoTold, TodayDemo } from "./TodayDemo.tsx";
+import { LotsThatWait } from "./TodayLots.tsx";
 import { TodayHead } from "./TodayHead.tsx";
 import { TodayPrograms } from "./TodayPrograms.tsx";
 import { TodayRow } from "./TodayRow.tsx";
@@ -41,6 +42,7 @@ export function TodayPage({ view, told }: Props) {
               {demo?.here === false && <LoadDemo />}
             </div>
           )}
+          <LotsThatWait lots={view.lots} />
           <SheetsThatWait sheets={view.sheets} now={view.now} />
           {decisions.total > 0 && (
             <TodaySection title="Needs a decision" remark="oldest first" more={moreOf(decisions)}>

@@ -27,6 +27,7 @@ const EMPTY: TodayView = {
   notAssessed: none,
   scans: [],
   sheets: SHEETS,
+  lots: { blocked: none, toMove: none },
   programs: [PROGRAM],
   kept: [],
   demo: null,

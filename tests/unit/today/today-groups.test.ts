@@ -1,7 +1,7 @@
 import { describe, expect, it } from "vitest";
 import { groupFlows, headline, headlineForGuest, SHOWN } from "#app/lib/today-groups.ts";
 import type { Outcome } from "#app/engine/vocabulary.ts";
-import type { TodayFlow, TodaySheets } from "#app/schemas/today.ts";
+import type { TodayFlow } from "#app/schemas/today.ts";
 
 const day = (number: number) => `2026-11-${String(number).padStart(2, "0")}T08:00:00.000Z`;
 
@@ -57,6 +57,8 @@ describe("flows by what they wait for", () => {
   });
 });
 
+const NO_LOTS = { blocked: { total: 0 }, toMove: { total: 0 } };
+
 describe("the sentence at the top", () => {
   it.each<[decisions: number, outOfDate: number, notAssessed: number, sentence: string]>([
     [0, 0, 0, "Nothing waits for a decision."],
@@ -68,7 +70,8 @@ describe("the sentence at the top", () => {
   ])("%i, %i and %i", (decisions, outOfDate, notAssessed, sentence) => {
     expect(
       headline({
-        sheets: { toRelease: { total: 0 }, toSign: { total: 0 }, returned: { total: 0 } } as TodaySheets,
+        sheets: { toRelease: { total: 0 }, toSign: { total: 0 }, returned: { total: 0 } },
+        lots: NO_LOTS,
         decisions: { total: decisions },
         outOfDate: { total: outOfDate },
         notAssessed: { total: notAssessed },
@@ -77,10 +80,11 @@ describe("the sentence at the top", () => {
   });
 
   it("begins with what waits for the reader alone", () => {
-    const sheets = { toRelease: { total: 2 }, toSign: { total: 1 }, returned: { total: 1 } } as TodaySheets;
+    const sheets = { toRelease: { total: 2 }, toSign: { total: 1 }, returned: { total: 1 } };
     const none = { total: 0 };
-    expect(headline({ sheets, decisions: { total: 1 }, outOfDate: none, notAssessed: none })).toBe(
-      "Two sheets wait for your review, one deviation waits for your signature, one sheet was returned to you and one flow needs a decision.",
+    const lots = { blocked: { total: 1 }, toMove: { total: 2 } };
+    expect(headline({ sheets, lots, decisions: { total: 1 }, outOfDate: none, notAssessed: none })).toBe(
+      "Two sheets wait for your review, one deviation waits for your signature, one sheet was returned to you, one lot or step is held, two lots are on old sheets and one flow needs a decision.",
     );
   });
 
