@@ -1,5 +1,7 @@
 import { expect, expectNoAxeFindings, signIn, test } from "./support.ts";
 
+test.use({ refusals: true });
+
 const day = (days: number) => new Date(Date.now() + days * 24 * 3600e3).toISOString().slice(0, 10);
 
 test("a process owner names who stands in, with days, and ends it early", async ({ page }) => {
