@@ -24,14 +24,18 @@ export function DelegatesPage({ rows, choices, done, lastResult }: Props) {
         holds lots and clears holds and stops, and nothing else of theirs. Never one’s own work, nor that of the person
         stood in for.
       </p>
-      {choices.length > 0 && <NameDelegate key={rows.length} choices={choices} lastResult={lastResult} />}
-      {rows.length === 0 ? (
-        <EmptyState title="Nobody stands in for anybody">
-          A process owner who will be away names somebody of the program here, with the first and the last day.
-        </EmptyState>
-      ) : (
-        <Delegations rows={rows} />
-      )}
+      <div className="grid items-start gap-6 wide:grid-cols-[minmax(0,1fr)_480px]">
+        {choices.length > 0 && <NameDelegate key={rows.length} choices={choices} lastResult={lastResult} />}
+        <div className="min-w-0 wide:-order-1">
+          {rows.length === 0 ? (
+            <EmptyState title="Nobody stands in for anybody">
+              A process owner who will be away names somebody of the program here, with the first and the last day.
+            </EmptyState>
+          ) : (
+            <Delegations rows={rows} />
+          )}
+        </div>
+      </div>
     </>
   );
 }
@@ -39,7 +43,7 @@ export function DelegatesPage({ rows, choices, done, lastResult }: Props) {
 function Delegations({ rows }: { rows: DelegationRow[] }) {
   const sending = useNavigation().state === "submitting";
   return (
-    <section aria-labelledby="delegations" className="frame mt-6">
+    <section aria-labelledby="delegations" className="frame">
       <h2 id="delegations" className="px-4 pt-3 pb-2 font-semibold">
         Who stands in
       </h2>

@@ -27,7 +27,7 @@ interface Values extends Record<string, unknown> {
 export function NameDelegate({ choices, lastResult }: Props) {
   const [form, { whom, from, until, reason }] = useRecordForm<Values>({ id: "delegate", lastResult });
   return (
-    <section aria-labelledby="name-delegate" className="frame max-w-160 p-4">
+    <section aria-labelledby="name-delegate" className="frame p-4">
       <h2 id="name-delegate" className="font-semibold">
         Name who stands in for you
       </h2>

@@ -35,6 +35,7 @@ export function TodayPage({ view, told }: Props) {
       {demo && <DemoTold told={told} here={demo.here} />}
       <div className="grid gap-x-12 gap-y-6 wide:grid-cols-[minmax(0,1fr)_384px]">
         <div className="min-w-0">
+          <LotsThatWait lots={view.lots} />
           {!mayAssess && scans}
           {flows === 0 && (
             <div className="mb-6 space-y-6">
@@ -42,7 +43,6 @@ export function TodayPage({ view, told }: Props) {
               {demo?.here === false && <LoadDemo />}
             </div>
           )}
-          <LotsThatWait lots={view.lots} />
           <SheetsThatWait sheets={view.sheets} now={view.now} />
           {decisions.total > 0 && (
             <TodaySection title="Needs a decision" remark="oldest first" more={moreOf(decisions)}>
