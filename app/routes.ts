@@ -27,6 +27,7 @@ export default [
     ...prefix("floor", [
       index("routes/_floor/find.tsx"),
       route("lots/:lotId", "routes/_floor/lot.tsx"),
+      route("lots/:lotId/entries", "routes/_floor/entries.ts"),
       route("lots/:lotId/steps/:number", "routes/_floor/step.tsx"),
     ]),
   ]),

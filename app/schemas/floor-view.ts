@@ -81,6 +81,7 @@ export interface FloorLot {
   sheet: FloorSheet | null;
   mayHold: boolean;
   person: string;
+  personId: string;
   /** ISO, when all this was so */
   checkedAt: string;
 }

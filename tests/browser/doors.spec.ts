@@ -33,6 +33,7 @@ const DOORS: Record<string, string> = {
   "/sheets/:assessmentId/draft.pdf": "302 404 200 200 200 200 404",
   "/floor": "302 403 200 200 200 200 403",
   "/floor/lots/:lotId": "302 404 200 200 200 200 404",
+  "/floor/lots/:lotId/entries": "302 404 404 404 404 404 404",
   "/floor/lots/:lotId/steps/:number": "302 404 302 302 302 302 404",
   "/": "302 200 200 200 200 200 200",
   "/films": "302 403 200 200 200 200 200",

@@ -23,6 +23,8 @@ async function lotOnSheet(page: Page, name: string): Promise<string> {
   await page.getByRole("checkbox").check();
   await press(page, "Release the sheet");
   await page.getByRole("link", { name: "Open the sheet" }).click();
+  await expect(page).toHaveURL(/\/sheets\/revisions\//);
+  await expect(page.getByText("Current: this is the revision in force.")).toBeVisible();
   const title = (await page.getByRole("heading", { level: 1 }).textContent()) ?? "";
 
   await signIn(page, "engineer");
@@ -134,6 +136,78 @@ test("a screen of the floor fits a phone, and a dark one", async ({ page, browse
     }
     await expectNoAxeFindings(phone);
   }
+});
+
+test.describe("through a lost connection", () => {
+  test.use({ serviceWorkers: "allow", refusals: true, viewport: TABLET });
+
+  test("a sheet is read with its age, and what is entered is kept, sent once, and shown where it is refused", async ({
+    page,
+    context,
+    browser,
+  }) => {
+    test.slow();
+    const name = `O-${Date.now().toString(36)}`;
+    const desk = await lotOnSheet(page, name);
+    await signIn(page, "technician");
+    const lot = `/floor${desk}`;
+    await page.goto(lot);
+    await page.getByRole("button", { name: /^I have read/ }).click();
+    await expect(page.getByRole("link", { name: /^Go to step 1,/ })).toBeVisible();
+    // Every step of the lot is kept, though none was opened.
+    await expect
+      .poll(
+        () =>
+          page.evaluate(async () => {
+            const names = (await caches.keys()).filter((each) => each.startsWith("floor-pages-"));
+            return (await Promise.all(names.map(async (each) => (await caches.open(each)).keys()))).flat().length;
+          }),
+        { timeout: 60_000 },
+      )
+      .toBe(20);
+
+    await context.setOffline(true);
+    await page.goto(`${lot}/steps/1`);
+    await expect(
+      page.getByText("No connection: whether this sheet is still current could not be checked"),
+    ).toBeVisible();
+    await expect(page.getByText(/^It is as it was at .+ ago\./)).toBeVisible();
+    await expect(page.getByText("Current at")).toBeHidden();
+    await page.getByRole("button", { name: /^Start this step/ }).click();
+    await expect(page.getByRole("status", { name: "Entries that wait" })).toContainText("Step 1 started");
+    await page.getByRole("button", { name: /^Step done/ }).click();
+    await expect(page.getByText(/^2 entries wait for the connection/)).toBeVisible();
+    await page.goto(`${lot}/steps/2`);
+    await page.getByRole("button", { name: /^Start this step/ }).click();
+    await expect(page.getByText(/^3 entries wait for the connection/)).toBeVisible();
+
+    // Meanwhile somebody who has a connection stops the second step.
+    const other = await newPage(browser, TABLET);
+    await signIn(other, "process owner");
+    await other.goto(`${lot}/steps/2?do=stop`);
+    await other.getByLabel("Cause").selectOption("tool trouble");
+    await other.getByLabel("What happened").fill("The gauge drifts");
+    await press(other, "Stop it for every lot");
+    await expect(other.getByRole("alert")).toContainText("is stopped for every lot");
+
+    await context.setOffline(false);
+    await expect(page.getByText("2 entries that waited have been sent.")).toBeVisible({ timeout: 30_000 });
+    const refused = page.getByRole("alert").filter({ hasText: "Not taken: Step 2 started" });
+    await expect(refused).toContainText("is stopped for every lot: tool trouble");
+    await refused.getByRole("button", { name: "Keep it as an observation" }).click();
+    await expect(page.getByText("3 entries that waited have been sent.")).toBeVisible({ timeout: 30_000 });
+    await page.goto(lot);
+    const entries = page.getByRole("region", { name: "Entered last" });
+    await expect(entries.getByText(/Step 2 started/)).toHaveCount(1);
+    await expect(entries.getByText("done", { exact: true })).toHaveCount(1);
+
+    await page.goto("/");
+    await press(page, "Sign out");
+    await expect(page).toHaveURL(/\/sign-in/);
+    expect(
+      await page.evaluate(async () => (await caches.keys()).filter((each) => each.startsWith("floor-pages-"))),
+    ).toEqual([]);
+  });
 });
 
 test.describe("without scripts", () => {

@@ -1,8 +1,8 @@
-import { Form } from "react-router";
 import { Swatch } from "#app/components/drawings/Swatch.tsx";
 import { entryWords } from "#app/lib/floor/entry-words.ts";
 import { floorPath } from "#app/lib/floor/floor-path.ts";
 import { EntryFields } from "./EntryFields.tsx";
+import { FloorForm } from "./FloorForm.tsx";
 import type { FloorStepProps } from "./FloorStepPage.tsx";
 
 const ACTION =
@@ -59,10 +59,15 @@ export function FloorActions(props: FloorStepProps & { blocked: boolean }) {
 /** Starts the step, or says that it is done; where neither can be, why, and the way there. */
 function MainAction({ lot, sheet, step, newId, blocked }: FloorStepProps & { blocked: boolean }) {
   const { progress, acknowledgedAt, leg, steps } = sheet;
-  const next = steps[steps.indexOf(step) + 1];
+  const next = steps[steps.findIndex(({ number }) => number === step.number) + 1];
+  const here = floorPath(lot.id, step.number, leg);
   if (progress.underWay === step.number)
     return (
-      <Form method="post" action={floorPath(lot.id, step.number, leg)}>
+      <FloorForm
+        action={here}
+        next={next ? floorPath(lot.id, next.number, leg) : here}
+        words={`Step ${step.number} done`}
+      >
         <EntryFields sheet={sheet} id={newId} kind="done" step={step.number} />
         {next && <input type="hidden" name="next" value={next.number} />}
         <button type="submit" className={`${ACTION} btn-primary tablet:min-h-37`}>
@@ -71,7 +76,7 @@ function MainAction({ lot, sheet, step, newId, blocked }: FloorStepProps & { blo
             {next ? `Goes to step ${next.number}, ${next.title}` : "It is the last one"}
           </span>
         </button>
-      </Form>
+      </FloorForm>
     );
   if (progress.underWay !== null)
     return (
@@ -96,7 +101,7 @@ function MainAction({ lot, sheet, step, newId, blocked }: FloorStepProps & { blo
     );
   const done = progress.done.includes(step.number);
   return (
-    <Form method="post" action={floorPath(lot.id, step.number, leg)}>
+    <FloorForm action={here} next={here} words={`Step ${step.number} started`}>
       <EntryFields sheet={sheet} id={newId} kind="started" step={step.number} />
       <button type="submit" className={`${ACTION} tablet:min-h-37 ${done ? "border-b border-line" : "btn-primary"}`}>
         {done ? "Start again" : "Start this step"}
@@ -108,6 +113,6 @@ function MainAction({ lot, sheet, step, newId, blocked }: FloorStepProps & { blo
               : `The lot is at step ${progress.here ?? "the end"}: mind the order`}
         </span>
       </button>
-    </Form>
+    </FloorForm>
   );
 }

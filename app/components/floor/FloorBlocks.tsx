@@ -6,11 +6,11 @@ import type { FloorBlock } from "#app/schemas/floor-view.ts";
 export function FloorBlocks({ blocks, lot }: { blocks: readonly FloorBlock[]; lot: string }) {
   if (blocks.length === 0) return null;
   return (
-    <ul className="mb-4">
+    <ul className="mb-4" aria-label="What blocks">
       {blocks.map(({ kind, id, step, what, remedy, opened, mayClear }) => (
-        <li key={`${kind} ${id} ${step}`} role="alert" className="mb-2 flex gap-4 border-2 border-stop bg-raised p-4">
+        <li key={`${kind} ${id} ${step}`} className="mb-2 flex gap-4 border-2 border-stop bg-raised p-4">
           <Swatch level="stop" width={40} height={40} scale={1.04} />
-          <div className="min-w-0">
+          <div role="alert" className="min-w-0">
             <p className="text-figure font-semibold text-stop">{what}</p>
             {opened && (
               <p className="text-lead">

@@ -1,6 +1,5 @@
-import { getFormProps, type FieldMetadata, type SubmissionResult } from "@conform-to/react";
+import { type FieldMetadata, type SubmissionResult } from "@conform-to/react";
 import type { ReactNode } from "react";
-import { Form } from "react-router";
 import { ChoiceField, sameWords } from "#app/components/forms/ChoiceField.tsx";
 import { LineField } from "#app/components/forms/LineField.tsx";
 import { NoteField } from "#app/components/forms/NoteField.tsx";
@@ -9,6 +8,7 @@ import { BLOCK_CAUSE_NAMES } from "#app/lib/floor/block-causes.ts";
 import { floorPath, type FloorDeed } from "#app/lib/floor/floor-path.ts";
 import { GRAVITY, MEASURED_ON, MEASURED_SIDES } from "#app/lib/floor/measured-how.ts";
 import { EntryFields } from "./EntryFields.tsx";
+import { FloorForm } from "./FloorForm.tsx";
 import type { FloorStepProps } from "./FloorStepPage.tsx";
 
 interface Props extends FloorStepProps {
@@ -65,10 +65,12 @@ export function FloorDeedForm({ lot, sheet, step, deed, newId, lastResult }: Pro
   });
   const blocks = deed === "stop" || deed === "hold";
   return (
-    <Form
-      method="post"
+    <FloorForm
+      id={form.id}
+      noValidate
       action={floorPath(lot.id, step.number, sheet.leg, deed)}
-      {...getFormProps(form)}
+      next={floorPath(lot.id, step.number, sheet.leg)}
+      words={`${title}, step ${step.number}`}
       className="floor-form max-w-160 space-y-2 text-lead"
     >
       <p className="text-quiet">
@@ -99,7 +101,7 @@ export function FloorDeedForm({ lot, sheet, step, deed, newId, lastResult }: Pro
           Back
         </a>
       </div>
-    </Form>
+    </FloorForm>
   );
 }
 

@@ -1,4 +1,4 @@
-import { Form } from "react-router";
+import type { ReactNode } from "react";
 import { SupportBar } from "#app/components/drawings/SupportBar.tsx";
 import { Swatch } from "#app/components/drawings/Swatch.tsx";
 import { SUPPORT_SIGNS } from "#app/components/drawings/severity.ts";
@@ -10,6 +10,8 @@ import { FloorBlocks } from "./FloorBlocks.tsx";
 import { FloorCautions } from "./FloorCautions.tsx";
 import { FloorClocks } from "./FloorClocks.tsx";
 import { FloorEntries } from "./FloorEntries.tsx";
+import { FloorForm } from "./FloorForm.tsx";
+import { FloorOnDevice } from "./FloorOnDevice.tsx";
 import { FloorRefusal } from "./FloorRefusal.tsx";
 import { FloorSheetHead } from "./FloorSheetHead.tsx";
 
@@ -20,12 +22,21 @@ interface Props {
 }
 
 /** A lot on the floor: what blocks it, its sheet to be acknowledged, where it is, and its steps. */
-export function FloorLotPage({ lot, newId, refused }: Props) {
+export function FloorLotPage(props: Props) {
+  return (
+    <FloorOnDevice lot={props.lot}>
+      {(lot, notices) => <LotScreen {...props} lot={lot} notices={notices} />}
+    </FloorOnDevice>
+  );
+}
+
+function LotScreen({ lot, newId, refused, notices }: Props & { notices: ReactNode }) {
   const { sheet, holds, name } = lot;
   return (
     <>
       <FloorSheetHead lot={lot} sheet={sheet} />
       <main id="main" className="mx-auto max-w-240 px-4 py-5 tablet:px-6">
+        {notices}
         <FloorRefusal sentence={refused} />
         <FloorBlocks blocks={sheet ? sheet.blocks.filter(({ kind }) => kind !== "assessment") : holds} lot={lot.id} />
         <h1 className="text-answer font-medium wrap-anywhere">Lot {name}</h1>
@@ -63,7 +74,7 @@ function OnSheet({ lot, sheet, newId }: { lot: FloorLot; sheet: FloorSheet; newI
       )}
       <p className="mt-1 text-lead text-quiet">{pin.title}</p>
       {acknowledgedAt === null ? (
-        <Acknowledge sheet={sheet} newId={newId} />
+        <Acknowledge sheet={sheet} newId={newId} here={floorPath(lot.id, null, leg)} />
       ) : here ? (
         <a
           href={floorPath(lot.id, here.number, leg)}
@@ -145,10 +156,15 @@ function stateOf(step: number, { progress, pin, blocks }: FloorSheet): string {
 }
 
 /** Once for each revision and person: that they have read it, and know what must not happen. */
-function Acknowledge({ sheet, newId }: { sheet: FloorSheet; newId: string }) {
+function Acknowledge({ sheet, newId, here }: { sheet: FloorSheet; newId: string; here: string }) {
   if (sheet.pin.state !== "released") return null;
   return (
-    <Form method="post" className="mt-4">
+    <FloorForm
+      action={here}
+      next={here}
+      words={`Sheet ${sheet.pin.number} ${sheet.pin.letter} acknowledged`}
+      className="mt-4"
+    >
       <p className="text-lead">
         Read the steps and the cautions below first. Nothing starts before you have acknowledged this revision; your
         name and the time are kept.
@@ -161,6 +177,6 @@ function Acknowledge({ sheet, newId }: { sheet: FloorSheet; newId: string }) {
         I have read {sheet.pin.number} {sheet.pin.letter}
         <span className="text-lead font-normal">Acknowledge it, once for this revision</span>
       </button>
-    </Form>
+    </FloorForm>
   );
 }

@@ -3,10 +3,10 @@ import { FloorHead } from "./FloorHead.tsx";
 
 /** The head of a screen of one lot: its sheet, and since when that is known to be in force. */
 export function FloorSheetHead({ lot, sheet }: { lot: FloorLot; sheet: FloorSheet | null }) {
-  const { wafers, name, person, checkedAt } = lot;
+  const { wafers, name, person, personId, checkedAt } = lot;
   const at = `${checkedAt.slice(11, 16)} UTC`;
   return (
-    <FloorHead person={person}>
+    <FloorHead person={person} personId={personId}>
       {sheet && (
         <>
           <a href={`/sheets/revisions/${sheet.pin.revision}`} className="text-ink">
@@ -16,7 +16,10 @@ export function FloorSheetHead({ lot, sheet }: { lot: FloorLot; sheet: FloorShee
             </b>
           </a>
           {sheet.pin.state === "released" ? (
-            <span className="font-semibold text-clear">✓ Current at {at}</span>
+            <>
+              <span className="fresh-only font-semibold text-clear">✓ Current at {at}</span>
+              <span className="kept-only font-semibold text-stop">Kept, not checked since {at}</span>
+            </>
           ) : (
             <span className="font-semibold text-stop">
               ✕ {sheet.pin.state}, seen {at}

@@ -1,4 +1,5 @@
 import type { SubmissionResult } from "@conform-to/react";
+import type { ReactNode } from "react";
 import { SupportBar } from "#app/components/drawings/SupportBar.tsx";
 import { floorPath, type FloorDeed } from "#app/lib/floor/floor-path.ts";
 import type { FloorStep } from "#app/lib/floor/floor-steps.ts";
@@ -7,6 +8,7 @@ import { FloorActions } from "./FloorActions.tsx";
 import { FloorBlocks } from "./FloorBlocks.tsx";
 import { FloorClocks } from "./FloorClocks.tsx";
 import { FloorDeedForm } from "./FloorDeedForm.tsx";
+import { FloorOnDevice } from "./FloorOnDevice.tsx";
 import { FloorRefusal } from "./FloorRefusal.tsx";
 import { FloorSheetHead } from "./FloorSheetHead.tsx";
 import { StepCommand } from "./StepCommand.tsx";
@@ -21,12 +23,19 @@ export interface FloorStepProps {
 }
 
 /** One step of a lot: what hands do, what must not happen, and the few things that can be said of it. */
-export function FloorStepPage({
-  answer,
-  ...props
-}: FloorStepProps & {
+export function FloorStepPage(props: FloorStepProps & Answered) {
+  return (
+    <FloorOnDevice lot={props.lot}>
+      {(lot, notices) => <StepScreen {...props} lot={lot} sheet={lot.sheet ?? props.sheet} notices={notices} />}
+    </FloorOnDevice>
+  );
+}
+
+interface Answered {
   answer: { sentence: string | null; lastResult: SubmissionResult<string[]> } | undefined;
-}) {
+}
+
+function StepScreen({ answer, notices, ...props }: FloorStepProps & Answered & { notices: ReactNode }) {
   const { lot, sheet, step, deed } = props;
   const blocks = sheet.blocks.filter((block) => block.step === null || block.step === step.number);
   return (
@@ -35,6 +44,7 @@ export function FloorStepPage({
       <div className="flex min-h-0 flex-1 flex-col tablet:flex-row">
         {/* On a tablet it scrolls by itself, so that what can be done stays in view. */}
         <main id="main" tabIndex={0} className="min-w-0 flex-1 overflow-y-auto px-4 py-5 tablet:px-6">
+          {notices}
           <FloorRefusal sentence={answer?.sentence ?? null} />
           <FloorBlocks blocks={blocks} lot={lot.id} />
           {deed === null ? (
@@ -83,7 +93,7 @@ function Notes({ sheet, step }: { sheet: FloorSheet; step: FloorStep }) {
 /** Back, all steps as a bar, and what comes next. */
 function StepFoot({ lot, sheet, step }: FloorStepProps) {
   const { steps, support, leg } = sheet;
-  const index = steps.indexOf(step);
+  const index = steps.findIndex(({ number }) => number === step.number);
   const [back, next] = [steps[index - 1], steps[index + 1]];
   const side =
     "flex min-h-27 w-27 flex-none items-center justify-center px-2 text-center text-lead font-medium no-underline";

@@ -35,6 +35,7 @@ export async function floorLot(
       sheet: pins[0] ? await floorSheet(em, scope, lot, pins, askedLeg) : null,
       mayHold: mayInProgram(scope.actor, "hold lots and clear what the shift can", program.id),
       person: scope.actor.name,
+      personId: scope.actor.id,
       checkedAt: new Date().toISOString(),
     };
   });
