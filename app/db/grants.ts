@@ -16,6 +16,8 @@ const ADD_ONLY = [
   "sheet_file",
   "sheet_comment",
   "sheet_print",
+  "incident_note",
+  "incident_photo",
 ];
 const NEVER_TAKEN_OUT = [
   "film_stress_value",
@@ -24,6 +26,7 @@ const NEVER_TAKEN_OUT = [
   "sheet",
   "sheet_revision",
   "deviation",
+  "incident",
 ];
 /** One row that the migration puts in. */
 const READ_AND_CHANGE = ["site_setting"];

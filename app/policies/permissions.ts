@@ -13,6 +13,8 @@ export const PROGRAM_PERMISSIONS = {
   "comment in a review": ["technician", "engineer", "process owner", "shift lead"],
   "record deviations": ["engineer", "process owner"],
   "release, return and withdraw sheets": ["process owner"],
+  "report incidents": ["technician", "engineer", "process owner", "shift lead"],
+  "follow up incidents": ["engineer", "process owner"],
 } as const satisfies Record<string, readonly (ProgramRole | SiteRole)[]>;
 
 /** Things done to what the whole site shares. A program role counts when it is held in any program. */

@@ -28,6 +28,8 @@ const PROGRAM_TABLE: Record<keyof typeof PROGRAM_PERMISSIONS, string> = {
   "comment in a review": "- y y y y -",
   "record deviations": "  - - - y y -",
   "release, return and withdraw sheets": "- - - - y -",
+  "report incidents": "   - y y y y -",
+  "follow up incidents": "- - - y y -",
 };
 const SITE_TABLE: Record<keyof typeof SITE_PERMISSIONS, string> = {
   "see the library": "    - y y y y y",

@@ -51,6 +51,9 @@ import { SheetFile } from "./sheet-file.ts";
 import { SheetComment } from "./sheet-comment.ts";
 import { Deviation } from "./deviation.ts";
 import { SheetPrint } from "./sheet-print.ts";
+import { Incident } from "./incident.ts";
+import { IncidentNote } from "./incident-note.ts";
+import { IncidentPhoto } from "./incident-photo.ts";
 
 /** Every entity, listed by hand: the ORM finds nothing by itself. */
 export const entities = [
@@ -84,6 +87,9 @@ export const entities = [
   SheetComment,
   Deviation,
   SheetPrint,
+  Incident,
+  IncidentNote,
+  IncidentPhoto,
   ImportProfile,
   RepeatabilityStudy,
   ReferenceWafer,

@@ -2,7 +2,7 @@ import type { DemoTable } from "#app/lib/demo-tables.ts";
 
 /** A kind of record that goes with the demo; SQL of its columns is of `x`. */
 export interface DemoKind {
-  table: DemoTable | "film_stress_value" | "step_measurement" | "wafer_measurement" | "wafer_scan";
+  table: DemoTable | "incident" | "film_stress_value" | "step_measurement" | "wafer_measurement" | "wafer_scan";
   one: string;
   many: string;
   /** which rows go: of `programs` of the demo, or of what of its library is not among the `kept` */
@@ -50,6 +50,7 @@ export const DEMO_KINDS: readonly DemoKind[] = [
   ofProgram("step_measurement", "bow measured after a step", "x.wafer || ', ' || x.step_title", {
     many: "bows measured after a step",
   }),
+  ofProgram("incident", "incident", "x.kind || ', ' || x.step_title"),
   ofProgram("scan", "scan", "x.label"),
   ofProgram("scan_file", "raw file", "x.name"),
   ofProgram("wafer_scan", "placed scan", "(select w.name from wafer w where w.id = x.wafer_id)"),

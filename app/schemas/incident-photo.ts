@@ -1,0 +1,6 @@
+/** What a picture of an incident is kept as. */
+export const PHOTO_TYPES = ["image/jpeg", "image/png"] as const;
+export type PhotoType = (typeof PHOTO_TYPES)[number];
+
+/** Most pictures of one incident; the database holds it too. */
+export const MOST_PHOTOS = 6;
