@@ -113,6 +113,13 @@ export default [
       index("routes/_app/predictions/predictions.tsx"),
       route("points.csv", "routes/_app/predictions/points-csv.ts"),
     ]),
+    ...prefix("incidents", [
+      index("routes/_app/incidents/list.tsx"),
+      route("new", "routes/_app/incidents/new.tsx"),
+      route("incidents.csv", "routes/_app/incidents/csv.ts"),
+      route(":incidentId", "routes/_app/incidents/incident.tsx"),
+      route(":incidentId/photos/:photoId", "routes/_app/incidents/photo.ts"),
+    ]),
     ...prefix("lots", [index("routes/_app/lots/list.tsx"), route(":lotId", "routes/_app/lots/lot.tsx")]),
     route("import-profiles", "routes/_app/import-profiles.tsx"),
     ...prefix("wafers/:waferId", [

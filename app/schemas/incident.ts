@@ -82,3 +82,38 @@ export interface IncidentView {
   mayReport: boolean;
   mayFollowUp: boolean;
 }
+
+/** What the form of a report offers once its assessment is chosen. */
+export interface ReportGround {
+  assessment: { id: string; number: string; flow: string; program: string; lot: string | null };
+  /** legs of a flow that parts by slot, by their number; empty where it does not */
+  legs: { value: string; label: string }[];
+  steps: { value: string; label: string }[];
+  /** names of the lots of the program, the newest first */
+  lots: string[];
+  /** what the address brings along, and now, in UTC */
+  given: { step: string; leg: string; lot: string; wafer: string; occurredAt: string };
+}
+
+/** An incident as a row of the review board's list. */
+export interface IncidentRow {
+  id: string;
+  number: string;
+  program: string;
+  kind: IncidentKind;
+  severity: Severity;
+  state: IncidentState;
+  lot: string;
+  wafer: string | null;
+  step: number;
+  stepTitle: string;
+  support: SupportClass;
+  silicon: number;
+  films: string;
+  affected: number;
+  broken: number;
+  through: number | null;
+  occurredAt: string;
+  reportedBy: string;
+  words: string;
+}

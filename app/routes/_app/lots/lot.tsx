@@ -1,4 +1,4 @@
-import { redirect } from "react-router";
+import { Link, redirect } from "react-router";
 import { PageHead } from "#app/components/layout/PageHead.tsx";
 import { LotView } from "#app/components/lots/LotView.tsx";
 import { scopeOf } from "#app/server/contexts.server.ts";
@@ -46,6 +46,11 @@ export default function Lot({ loaderData }: Route.ComponentProps) {
           { name: "Lots", path: "/lots" },
         ]}
         remark={`${lot.program.name}, ${lot.wafers.length === 1 ? "1 wafer" : `${lot.wafers.length} wafers`}, first seen ${lot.createdAt.slice(0, 10)}`}
+        actions={
+          <Link to={`/incidents?q=${encodeURIComponent(lot.name)}`} className="btn">
+            Incidents of this lot
+          </Link>
+        }
       />
       <LotView lot={lot} query={query} />
     </>
