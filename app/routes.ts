@@ -126,6 +126,13 @@ export default [
       route("new", "routes/_app/lots/new.tsx"),
       route(":lotId", "routes/_app/lots/lot.tsx"),
     ]),
+    ...prefix("incidents", [
+      index("routes/_app/incidents/list.tsx"),
+      route("new", "routes/_app/incidents/new.tsx"),
+      route("incidents.csv", "routes/_app/incidents/csv.ts"),
+      route(":incidentId", "routes/_app/incidents/incident.tsx"),
+      route(":incidentId/photos/:photoId", "routes/_app/incidents/photo.ts"),
+    ]),
     route("import-profiles", "routes/_app/import-profiles.tsx"),
     ...prefix("wafers/:waferId", [
       index("routes/_app/wafers/wafer.tsx"),

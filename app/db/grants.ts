@@ -18,6 +18,8 @@ const ADD_ONLY = [
   "sheet_print",
   "lot_sheet",
   "floor_entry",
+  "incident_note",
+  "incident_photo",
 ];
 const NEVER_TAKEN_OUT = [
   "film_stress_value",
@@ -29,6 +31,7 @@ const NEVER_TAKEN_OUT = [
   "delegation",
   "lot_hold",
   "step_stop",
+  "incident",
 ];
 /** One row that the migration puts in. */
 const READ_AND_CHANGE = ["site_setting"];

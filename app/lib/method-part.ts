@@ -33,6 +33,7 @@ const PARTS: readonly (readonly [string, MethodPart | null])[] = [
   ["/instruments", SCANS],
   ["/import-profiles", SCANS],
   ["/predictions", part("conventions", "signs and words")],
+  ["/incidents", RULES],
   ["/jobs", SCANS],
 ];
 

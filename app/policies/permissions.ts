@@ -18,6 +18,8 @@ export const PROGRAM_PERMISSIONS = {
   "work on the floor": ["technician", "engineer", "process owner", "shift lead"],
   "hold lots and clear what the shift can": ["shift lead", "process owner"],
   "clear every hold and stop": ["process owner"],
+  "report incidents": ["technician", "engineer", "process owner", "shift lead"],
+  "follow up incidents": ["engineer", "process owner"],
 } as const satisfies Record<string, readonly (ProgramRole | SiteRole)[]>;
 
 /** Things done to what the whole site shares. A program role counts when it is held in any program. */

@@ -67,6 +67,13 @@ const WITHIN: (Page & { open: (actor: Actor) => boolean })[] = [
   { name: "Instruments", path: "/instruments", also: "profilometers", open: seesLibrary },
   { name: "Import profiles", path: "/import-profiles", open: (actor) => mayOnSite(actor, "keep import profiles") },
   { name: "Predicted against measured", path: "/predictions", open: seesWork },
+  { name: "Incidents", path: "/incidents", also: "breakage, cracks, chips, drops, review board", open: seesWork },
+  {
+    name: "Report an incident",
+    path: "/incidents/new",
+    also: "crack, chip, drop, broken wafer",
+    open: (actor) => programsWhere(actor, "report incidents").length > 0,
+  },
   {
     name: "The demo",
     path: "/demo",

@@ -61,6 +61,9 @@ const SUBJECTS: Record<string, string> = {
   SheetComment: "comment in a review",
   Deviation: "deviation",
   SheetPrint: "print of a sheet",
+  Incident: "incident",
+  IncidentNote: "note of an incident",
+  IncidentPhoto: "photo of an incident",
 };
 
 /** Columns that say nothing to a reader, or that must not be copied. */

@@ -2,6 +2,7 @@ import { randomUUID } from "node:crypto";
 import { readFileSync } from "node:fs";
 import { MikroORM } from "@mikro-orm/postgresql";
 import type { APIRequestContext } from "@playwright/test";
+import sharp from "sharp";
 import { databaseOptions } from "#app/db/options.ts";
 import { TERN } from "./flow-pages.ts";
 import { longProfile } from "./long-profile.ts";
@@ -23,6 +24,8 @@ export const WALLED: readonly string[] = [
   "waferScanId",
   "lotId",
   "revisionId",
+  "incidentId",
+  "photoId",
 ];
 
 type Query = <Row>(sql: string, params?: unknown[]) => Promise<Row[]>;
@@ -135,9 +138,11 @@ export async function ternIds(engineer: APIRequestContext): Promise<DoorIds> {
       [known.flowId],
     ),
   );
+  const incident = await reportedIncident(engineer, assessmentId);
   return {
     ...known,
     ...placed,
+    ...incident,
     revisionId,
     token: "of-no-sheet-whatsoever",
     assessmentId,
@@ -149,6 +154,40 @@ export async function ternIds(engineer: APIRequestContext): Promise<DoorIds> {
     number: "1",
     "*": "nowhere/at/all",
   };
+}
+
+/** An incident with a photo, reported as its form does. */
+async function reportedIncident(engineer: APIRequestContext, assessment: string) {
+  const answer = await engineer.post("/incidents/new", {
+    multipart: {
+      assessment,
+      leg: "0",
+      step: "3",
+      lot: "L-door",
+      kind: "chip",
+      severity: "near miss",
+      words: "At the door",
+      occurredAt: "2026-11-20 10:00",
+      photos: {
+        name: "door.png",
+        mimeType: "image/png",
+        buffer: await sharp({ create: { width: 8, height: 8, channels: 3, background: "#345" } })
+          .png()
+          .toBuffer(),
+      },
+    },
+  });
+  if (!answer.ok()) throw new Error(`No incident was reported: ${await answer.text()}`);
+  return asOwner(async (query) => {
+    const incidentId = await idOf(
+      query,
+      "select id from incident where words = 'At the door' order by created_at desc",
+    );
+    return {
+      incidentId,
+      photoId: await idOf(query, "select id from incident_photo where incident_id = ?", [incidentId]),
+    };
+  });
 }
 
 /** Copies of the same rows in a program of their own, to which nobody belongs. */
@@ -186,10 +225,17 @@ export function strangeIds(own: DoorIds): Promise<DoorIds> {
          select gen_random_uuid(), program_id, id, 'M-door', created_at, created_by_id from lot where id = ? returning id`,
       [lotId],
     );
+    const incidentId = await copy("incident", own["incidentId"], {
+      assessment_id: assessmentId,
+      lot_id: lotId,
+      wafer_id: null,
+    });
     return {
       ...own,
       flowId,
       fileId,
+      incidentId,
+      photoId: await copy("incident_photo", own["photoId"], { incident_id: incidentId }),
       stepId: await copy("flow_step", own["stepId"], { flow_id: flowId }),
       assessmentId,
       revisionId: await copy("sheet_revision", own["revisionId"], { sheet_id: sheetId, assessment_id: assessmentId }),

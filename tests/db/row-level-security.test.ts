@@ -34,6 +34,9 @@ const PROGRAM_TABLES = [
   "floor_entry",
   "lot_hold",
   "step_stop",
+  "incident",
+  "incident_note",
+  "incident_photo",
   "mail_outbox",
 ];
 const SITE_TABLES = [
@@ -208,7 +211,7 @@ describe("a write", () => {
     expect(touched).toEqual([{ slug: "tern" }]);
   });
 
-  test.each(["assessment", "scan_file", "audit_event", "film_stress_in_use"])(
+  test.each(["assessment", "scan_file", "audit_event", "film_stress_in_use", "incident_note", "incident_photo"])(
     "never changes or deletes a row of %s",
     async (table) => {
       await expect(forgetful(engineer, `update "${table}" set id = id`)).rejects.toThrow(/permission denied/);

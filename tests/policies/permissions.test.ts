@@ -33,6 +33,8 @@ const PROGRAM_TABLE: Record<keyof typeof PROGRAM_PERMISSIONS, string> = {
   "work on the floor": "  - y y y y -",
   "hold lots and clear what the shift can": "- - y - y -",
   "clear every hold and stop": "- - - - y -",
+  "report incidents": "   - y y y y -",
+  "follow up incidents": "- - - y y -",
 };
 const SITE_TABLE: Record<keyof typeof SITE_PERMISSIONS, string> = {
   "see the library": "    - y y y y y",

@@ -26,6 +26,16 @@ export function SidePane({ view }: { view: AssessmentView }) {
           <RemedyList remedies={remedies} />
         </PaneSection>
         {selected ? <Budget step={selected} /> : null}
+        {selected ? (
+          <p className="screen-only border-t border-line p-4 tablet:px-6">
+            <Link
+              to={`/incidents/new?assessment=${view.head.id}&step=${selected.number}${legQuery("&", leg)}`}
+              className="link"
+            >
+              Report an incident at step {selected.number}
+            </Link>
+          </p>
+        ) : null}
         <PaneSection title="Inputs assumed" id="assumed">
           {assumed.length === 0 ? (
             <p className="text-quiet">None of {inputs}: each was measured, looked up or given by its supplier.</p>

@@ -56,6 +56,9 @@ import { FloorEntry } from "./floor-entry.ts";
 import { LotHold } from "./lot-hold.ts";
 import { LotSheet } from "./lot-sheet.ts";
 import { StepStop } from "./step-stop.ts";
+import { Incident } from "./incident.ts";
+import { IncidentNote } from "./incident-note.ts";
+import { IncidentPhoto } from "./incident-photo.ts";
 
 /** Every entity, listed by hand: the ORM finds nothing by itself. */
 export const entities = [
@@ -90,6 +93,9 @@ export const entities = [
   Deviation,
   SheetPrint,
   Delegation,
+  Incident,
+  IncidentNote,
+  IncidentPhoto,
   ImportProfile,
   RepeatabilityStudy,
   ReferenceWafer,

@@ -24,6 +24,7 @@ import { ReviewAndRelease } from "./2026-12-10-review-and-release.ts";
 import { SiteSetting } from "./2026-12-11-site-setting.ts";
 import { Delegations } from "./2026-12-12-delegations.ts";
 import { LotsAndFloor } from "./2026-12-13-lots-and-floor.ts";
+import { Incidents } from "./2026-12-14-incidents.ts";
 
 /** Every migration in the order in which it runs. */
 export const migrations = [
@@ -53,4 +54,5 @@ export const migrations = [
   { name: "2026-12-11-site-setting", class: SiteSetting },
   { name: "2026-12-12-delegations", class: Delegations },
   { name: "2026-12-13-lots-and-floor", class: LotsAndFloor },
+  { name: "2026-12-14-incidents", class: Incidents },
 ];

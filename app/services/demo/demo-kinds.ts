@@ -2,7 +2,17 @@ import type { DemoTable } from "#app/lib/demo-tables.ts";
 
 /** A kind of record that goes with the demo; SQL of its columns is of `x`. */
 export interface DemoKind {
-  table: DemoTable | "film_stress_value" | "sheet_revision" | "step_measurement" | "wafer_measurement" | "wafer_scan";
+  table:
+    | DemoTable
+    | "film_stress_value"
+    | "incident"
+    | "lot_hold"
+    | "sheet_revision"
+    | "step_measurement"
+    | "step_stop"
+    | "floor_entry"
+    | "wafer_measurement"
+    | "wafer_scan";
   one: string;
   many: string;
   /** which rows go: of `programs` of the demo, or of what of its library is not among the `kept` */
@@ -55,6 +65,18 @@ export const DEMO_KINDS: readonly DemoKind[] = [
   ofProgram("step_measurement", "bow measured after a step", "x.wafer || ', ' || x.step_title", {
     many: "bows measured after a step",
   }),
+  ofProgram("floor_entry", "entry of the floor", "x.kind || ', step ' || x.step", { many: "entries of the floor" }),
+  ofProgram("lot_hold", "hold of a lot", "x.reason", {
+    many: "holds of lots",
+    by: "x.opened_by_id",
+    at: "x.opened_at",
+  }),
+  ofProgram("step_stop", "stop of a step", "x.title", {
+    many: "stops of steps",
+    by: "x.opened_by_id",
+    at: "x.opened_at",
+  }),
+  ofProgram("incident", "incident", "x.kind || ', ' || x.step_title"),
   ofProgram("scan", "scan", "x.label"),
   ofProgram("scan_file", "raw file", "x.name"),
   ofProgram("wafer_scan", "placed scan", "(select w.name from wafer w where w.id = x.wafer_id)"),

@@ -39,7 +39,8 @@ export async function findOrMakeWafer(
   return found;
 }
 
-async function findOrMakeLot(em: EntityManager, scope: ActorScope, program: string, name: string): Promise<Lot> {
+/** The lot of that name, made when it is new. */
+export async function findOrMakeLot(em: EntityManager, scope: ActorScope, program: string, name: string): Promise<Lot> {
   const known = await em.findOne(Lot, { program, name: named(name) });
   return known ?? em.create(Lot, { id: randomUUID(), program, name, note: "", ...made(scope) });
 }

@@ -1,5 +1,5 @@
 import { randomUUID } from "node:crypto";
-import { redirect } from "react-router";
+import { Link, redirect } from "react-router";
 import { PageHead } from "#app/components/layout/PageHead.tsx";
 import { LotOnSheet } from "#app/components/lots/LotOnSheet.tsx";
 import { LotView } from "#app/components/lots/LotView.tsx";
@@ -59,6 +59,11 @@ export default function Lot({ loaderData, actionData }: Route.ComponentProps) {
           { name: "Lots", path: "/lots" },
         ]}
         remark={`${lot.program.name}, ${lot.wafers.length === 1 ? "1 wafer" : `${lot.wafers.length} wafers`}, first seen ${lot.createdAt.slice(0, 10)}`}
+        actions={
+          <Link to={`/incidents?q=${encodeURIComponent(lot.name)}`} className="btn">
+            Incidents of this lot
+          </Link>
+        }
       />
       <LotOnSheet id={lot.id} desk={desk} answer={actionData} holdId={holdId} />
       <LotView lot={lot} query={query} answer={actionData} />
