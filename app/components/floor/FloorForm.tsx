@@ -47,7 +47,10 @@ export function FloorForm({ action, words, next, children, ...rest }: Props) {
         if (!busy) void send(new FormData(event.currentTarget, (event.nativeEvent as SubmitEvent).submitter));
       }}
     >
-      {children}
+      {/* What is pressed while an entry is on its way would be lost with the page that is left. */}
+      <fieldset disabled={busy} className="contents">
+        {children}
+      </fieldset>
     </Form>
   );
 }
