@@ -140,6 +140,7 @@ export default [
     ]),
     route("demo", "routes/_app/demo.tsx"),
     route("settings", "routes/_app/settings.tsx"),
+    route("delegates", "routes/_app/delegates.tsx"),
     route("preferences", "routes/_app/preferences.tsx"),
     route("preferences/mail", "routes/_app/mail/choices.tsx"),
     ...prefix("mail", [

@@ -26,6 +26,7 @@ const NEVER_TAKEN_OUT = [
   "sheet",
   "sheet_revision",
   "deviation",
+  "delegation",
   "lot_hold",
   "step_stop",
 ];

@@ -32,6 +32,7 @@ const WITHIN: (Page & { open: (actor: Actor) => boolean })[] = [
   { name: "Favourites", path: "/favourites", also: "marked, starred", open: seesLibrary },
   { name: "Preferences", path: "/preferences", also: "theme, dark, density, settings", open: () => true },
   { name: "E-mail", path: "/preferences/mail", also: "mail, digest, unsubscribe, notifications", open: () => true },
+  { name: "Delegates", path: "/delegates", also: "who stands in for a process owner, absence, leave", open: seesWork },
   {
     name: "Outbox",
     path: "/mail/outbox",

@@ -121,6 +121,7 @@ const DOORS: Record<string, string> = {
   "/lots/:lotId": "302 404 200 200 200 200 404",
   "/import-profiles": "302 403 200 200 200 200 403",
   "/demo": "302 403 403 403 200 403 403",
+  "/delegates": "302 403 200 200 200 200 403",
   "/settings": "302 403 403 403 403 403 200",
   "/preferences": "302 200 200 200 200 200 200",
   "/preferences/mail": "302 200 200 200 200 200 200",

@@ -29,6 +29,7 @@ const PROGRAM_TABLES = [
   "sheet_comment",
   "deviation",
   "sheet_print",
+  "delegation",
   "lot_sheet",
   "floor_entry",
   "lot_hold",

@@ -24,6 +24,7 @@ const PROGRAM_TABLE: Record<keyof typeof PROGRAM_PERMISSIONS, string> = {
   "edit stacks and flows": "- - - y y -",
   "run assessments": "    - - - y y -",
   "see the outbox": "     - - - - y y",
+  "name a delegate": "    - - - - y -",
   "ask for a review": "   - - - y y -",
   "comment in a review": "- y y y y -",
   "record deviations": "  - - - y y -",

@@ -4,6 +4,7 @@ import { BondingMaterial } from "./bonding-material.ts";
 import { Carrier } from "./carrier.ts";
 import { CarrierUnit } from "./carrier-unit.ts";
 import { Credential } from "./credential.ts";
+import { Delegation } from "./delegation.ts";
 import { DemoRecord } from "./demo-record.ts";
 import { Equipment } from "./equipment.ts";
 import { Favourite } from "./favourite.ts";
@@ -88,6 +89,7 @@ export const entities = [
   SheetComment,
   Deviation,
   SheetPrint,
+  Delegation,
   ImportProfile,
   RepeatabilityStudy,
   ReferenceWafer,
