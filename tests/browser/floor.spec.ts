@@ -71,6 +71,7 @@ test("a lot goes onto a sheet, is found with a scanner, acknowledged, worked, st
   await floor.getByRole("link", { name: /^Read the sheet first/ }).click();
   await floor.getByRole("button", { name: /^I have read/ }).click();
   await floor.getByRole("link", { name: /^Go to step 1,/ }).click();
+  await expect(floor).toHaveURL(/\/steps\/1$/);
   await expectNoAxeFindings(floor);
   const start = floor.getByRole("button", { name: /^Start this step/ });
   for (const button of [start, floor.getByRole("link", { name: /^Stop this step/ })])

@@ -29,8 +29,8 @@ export function FloorForm({ action, words, next, children, ...rest }: Props) {
     const fields = [...form].map(([name, value]): [string, string] => [name, typeof value === "string" ? value : ""]);
     const at = new Date().toISOString();
     const outcome = await outbox.enter({ id, person, lot, words, at, fields, refused: null });
+    if (outcome === "stored") return window.location.assign(next);
     setBusy(false);
-    if (outcome === "stored") window.location.assign(next);
     // Sent once more as a form of the page, which then says beside its fields what is wrong.
     if (outcome === "refused") await submit(form, { method: "post", action });
   };

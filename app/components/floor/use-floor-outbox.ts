@@ -1,4 +1,4 @@
-import { createContext, use, useCallback, useEffect, useState } from "react";
+import { createContext, use, useCallback, useEffect, useRef, useState } from "react";
 import { deliver } from "#app/lib/floor/deliver.ts";
 import { dropQueued, putQueued, queuedOf, type QueuedEntry } from "#app/lib/floor/floor-store.ts";
 
@@ -21,15 +21,18 @@ const AGAIN = 15_000;
 export function useFloorOutbox(person: string, lot: string): FloorOutbox {
   const [queued, setQueued] = useState<QueuedEntry[]>([]);
   const [sent, setSent] = useState(0);
+  // On its way by its own form, which leads on by itself: it does not wait.
+  const sending = useRef(new Set<string>());
   const look = useCallback(async () => {
-    setQueued((await queuedOf(person)).filter((entry) => entry.lot === lot));
+    const own = (await queuedOf(person)).filter((entry) => entry.lot === lot);
+    setQueued(own.filter(({ id }) => !sending.current.has(id)));
   }, [person, lot]);
 
   useEffect(() => {
     let stopped = false;
     const sendAll = async () => {
       for (const entry of await queuedOf(person)) {
-        if (entry.refused !== null) continue;
+        if (entry.refused !== null || sending.current.has(entry.id)) continue;
         const delivered = await deliver(entry);
         if (delivered.outcome === "waits") break;
         if (delivered.outcome === "refused") await putQueued({ ...entry, refused: delivered.sentence });
@@ -55,11 +58,16 @@ export function useFloorOutbox(person: string, lot: string): FloorOutbox {
     queued,
     sent,
     enter: async (entry) => {
-      await putQueued(entry);
-      const { outcome } = await deliver(entry);
-      if (outcome !== "waits") await dropQueued(entry.id);
-      await look();
-      return outcome;
+      sending.current.add(entry.id);
+      try {
+        await putQueued(entry);
+        const { outcome } = await deliver(entry);
+        if (outcome !== "waits") await dropQueued(entry.id);
+        return outcome;
+      } finally {
+        sending.current.delete(entry.id);
+        await look();
+      }
     },
     drop: async (id) => {
       await dropQueued(id);
