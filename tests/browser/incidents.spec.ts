@@ -3,6 +3,8 @@ import sharp from "sharp";
 import { assess, ownFlow, press } from "./flow-pages.ts";
 import { expect, expectNoAxeFindings, signIn, test } from "./support.ts";
 
+test.use({ refusals: true });
+
 const photo = async () => ({
   name: "crack.jpg",
   mimeType: "image/jpeg",
