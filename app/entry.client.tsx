@@ -2,12 +2,21 @@ import { StrictMode, startTransition, useEffect } from "react";
 import { hydrateRoot } from "react-dom/client";
 import { HydratedRouter } from "react-router/dom";
 import { wipeDrafts } from "./lib/drafts.ts";
+import { mayWipeFloor, wipeFloor } from "./lib/floor/wipe-floor.ts";
 
 // Before the router takes the form: whoever signs out leaves nothing behind in this browser.
 document.addEventListener(
   "submit",
-  ({ target }) => {
-    if (target instanceof HTMLFormElement && target.getAttribute("action") === "/sign-out") wipeDrafts();
+  (event) => {
+    const { target } = event;
+    if (!(target instanceof HTMLFormElement) || target.getAttribute("action") !== "/sign-out") return;
+    if (mayWipeFloor()) {
+      wipeDrafts();
+      wipeFloor();
+    } else {
+      event.preventDefault();
+      event.stopImmediatePropagation();
+    }
   },
   { capture: true },
 );

@@ -54,7 +54,8 @@ interface Framed {
 function usePreferences(): Preferences {
   const framed = useRouteLoaderData<Framed>("routes/_app/layout");
   const printed = useRouteLoaderData<Framed>("routes/_print/layout");
-  return (framed ?? printed)?.mine.preferences ?? DEFAULT_PREFERENCES;
+  const floor = useRouteLoaderData<Framed>("routes/_floor/layout");
+  return (framed ?? printed ?? floor)?.mine.preferences ?? DEFAULT_PREFERENCES;
 }
 
 export function Layout({ children }: { children: React.ReactNode }) {

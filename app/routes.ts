@@ -23,6 +23,14 @@ export default [
     route("stacks/compare/print", "routes/_print/comparison.tsx"),
     route("stacks/:stackId/sweep/print", "routes/_print/sweep.tsx"),
   ]),
+  layout("routes/_floor/layout.tsx", [
+    ...prefix("floor", [
+      index("routes/_floor/find.tsx"),
+      route("lots/:lotId", "routes/_floor/lot.tsx"),
+      route("lots/:lotId/entries", "routes/_floor/entries.ts"),
+      route("lots/:lotId/steps/:number", "routes/_floor/step.tsx"),
+    ]),
+  ]),
   layout("routes/_app/layout.tsx", [
     index("routes/_app/today.tsx"),
     ...prefix("films", [
@@ -120,7 +128,11 @@ export default [
       route(":incidentId", "routes/_app/incidents/incident.tsx"),
       route(":incidentId/photos/:photoId", "routes/_app/incidents/photo.ts"),
     ]),
-    ...prefix("lots", [index("routes/_app/lots/list.tsx"), route(":lotId", "routes/_app/lots/lot.tsx")]),
+    ...prefix("lots", [
+      index("routes/_app/lots/list.tsx"),
+      route("new", "routes/_app/lots/new.tsx"),
+      route(":lotId", "routes/_app/lots/lot.tsx"),
+    ]),
     route("import-profiles", "routes/_app/import-profiles.tsx"),
     ...prefix("wafers/:waferId", [
       index("routes/_app/wafers/wafer.tsx"),
@@ -135,6 +147,7 @@ export default [
     ]),
     route("demo", "routes/_app/demo.tsx"),
     route("settings", "routes/_app/settings.tsx"),
+    route("delegates", "routes/_app/delegates.tsx"),
     route("preferences", "routes/_app/preferences.tsx"),
     route("preferences/mail", "routes/_app/mail/choices.tsx"),
     ...prefix("mail", [

@@ -11,7 +11,7 @@ self.addEventListener("install", (event) => {
 });
 
 self.addEventListener("activate", (event) => {
-  const others = caches.keys().then((names) => names.filter((name) => name !== KEPT));
+  const others = caches.keys().then((names) => names.filter((name) => name.startsWith("unreachable-") && name !== KEPT));
   event.waitUntil(others.then((names) => Promise.all(names.map((name) => caches.delete(name)))));
 });
 

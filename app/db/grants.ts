@@ -16,6 +16,8 @@ const ADD_ONLY = [
   "sheet_file",
   "sheet_comment",
   "sheet_print",
+  "lot_sheet",
+  "floor_entry",
   "incident_note",
   "incident_photo",
 ];
@@ -26,6 +28,9 @@ const NEVER_TAKEN_OUT = [
   "sheet",
   "sheet_revision",
   "deviation",
+  "delegation",
+  "lot_hold",
+  "step_stop",
   "incident",
 ];
 /** One row that the migration puts in. */

@@ -153,7 +153,8 @@ function supportInWords(steps: readonly StepResult[]): string {
   return `Support needed: ${parts.join(", ")}.`;
 }
 
-function groupView(group: SheetGroup, before: StepResult | null, result: AssessmentResult): SheetGroupView {
+/** A group of steps in words for hands; one step is a group of its own. */
+export function groupView(group: SheetGroup, before: StepResult | null, result: AssessmentResult): SheetGroupView {
   const { steps, holding, heldBy } = group;
   const support = supportClassOf(holding);
   const { findings, bonds, tapeTemperature } = result;

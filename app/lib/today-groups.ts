@@ -1,4 +1,4 @@
-import type { TodayFlow, TodayGroup } from "#app/schemas/today.ts";
+import type { TodayFlow, TodayGroup, TodayLots } from "#app/schemas/today.ts";
 import { count } from "./count-words.ts";
 
 /** Rows that a group shows; the rest is counted and one link away. */
@@ -39,18 +39,34 @@ function group<Row>(rows: Row[], since: (row: Row) => string): TodayGroup<Row> {
   return { rows: sorted.slice(0, SHOWN), total: rows.length };
 }
 
-/** What waits, in one sentence: 'Two flows need a decision and one assessment is out of date.' */
-export function headline({ decisions, outOfDate, notAssessed }: Record<keyof TodayGroups, { total: number }>): string {
+interface Waiting extends Record<keyof TodayGroups, { total: number }> {
+  sheets: Record<"toRelease" | "toSign" | "returned", { total: number }>;
+  lots: Record<keyof TodayLots, { total: number }>;
+}
+
+/** What waits, in one sentence, what waits for the reader alone first: 'One sheet waits for your review and two flows need a decision.' */
+export function headline({ sheets, lots, decisions, outOfDate, notAssessed }: Waiting): string {
+  const { toRelease, toSign, returned } = sheets;
   const parts = [
+    part(toRelease.total, "sheet waits for your review", "sheets wait for your review"),
+    part(toSign.total, "deviation waits for your signature", "deviations wait for your signature"),
+    part(returned.total, "sheet was returned to you", "sheets were returned to you"),
+    part(lots.blocked.total, "lot or step is held", "lots or steps are held"),
+    part(lots.toMove.total, "lot is on an old sheet", "lots are on old sheets"),
     part(decisions.total, "flow needs a decision", "flows need a decision"),
     part(outOfDate.total, "assessment is out of date", "assessments are out of date"),
     part(notAssessed.total, "flow is not assessed yet", "flows are not assessed yet"),
   ].filter((text) => text !== null);
   const [last] = parts.slice(-1);
   if (last === undefined) return "Nothing waits for a decision.";
-  const sentence = parts.length === 1 ? last : `${parts.slice(0, -1).join(", ")} and ${last}`;
-  return `${sentence.charAt(0).toUpperCase()}${sentence.slice(1)}.`;
+  return sentenceOf(parts.length === 1 ? last : `${parts.slice(0, -1).join(", ")} and ${last}`);
 }
+
+/** What a guest has, in one sentence: 'Two sheets are in force for your programs.' */
+export const headlineForGuest = (inForce: number): string =>
+  sentenceOf(`${part(inForce, "sheet is", "sheets are") ?? "no sheet is"} in force for your programs`);
+
+const sentenceOf = (words: string) => `${words.charAt(0).toUpperCase()}${words.slice(1)}.`;
 
 const part = (number: number, one: string, many: string) =>
   number === 0 ? null : `${count(number)} ${number === 1 ? one : many}`;

@@ -15,6 +15,7 @@ const ALL: (Place & { open: (actor: Actor) => boolean })[] = [
   { name: "Carriers & bonds", path: "/carriers", open: (actor) => mayOnSite(actor, "see the library") },
   { name: "Scans", path: "/scans", open: (actor) => programsWhere(actor, "see the work").length > 0 },
   { name: "Sheets", path: "/sheets", open: (actor) => programsWhere(actor, "see released sheets").length > 0 },
+  { name: "Floor", path: "/floor", open: (actor) => programsWhere(actor, "work on the floor").length > 0 },
   { name: "Method", path: "/method", open: () => true },
   { name: "Settings", path: "/settings", open: (actor) => mayOnSite(actor, "edit site settings") },
 ];
@@ -31,6 +32,7 @@ const WITHIN: (Page & { open: (actor: Actor) => boolean })[] = [
   { name: "Favourites", path: "/favourites", also: "marked, starred", open: seesLibrary },
   { name: "Preferences", path: "/preferences", also: "theme, dark, density, settings", open: () => true },
   { name: "E-mail", path: "/preferences/mail", also: "mail, digest, unsubscribe, notifications", open: () => true },
+  { name: "Delegates", path: "/delegates", also: "who stands in for a process owner, absence, leave", open: seesWork },
   {
     name: "Outbox",
     path: "/mail/outbox",
@@ -58,6 +60,7 @@ const WITHIN: (Page & { open: (actor: Actor) => boolean })[] = [
   { name: "What would change?", path: "/assessments/change-request", also: "change request", open: seesWork },
   { name: "Draft sheets", path: "/sheets/drafts", also: "print a draft", open: seesWork },
   { name: "Lots", path: "/lots", also: "wafers", open: seesWork },
+  { name: "New lots", path: "/lots/new", also: "create, import a table of lots", open: mayUpload },
   { name: "Import scans", path: "/scans/import", also: "upload files", open: mayUpload },
   { name: "Upload one pair of scans", path: "/scans/new", open: mayUpload },
   { name: "Files that wait", path: "/scans/waiting", also: "scans without a partner", open: seesWork },

@@ -1,4 +1,5 @@
 import type { RevisionState } from "#app/schemas/sheet-revision.ts";
+import type { StoodInFor } from "./roles.ts";
 
 /** What decides whether a person may release a revision. */
 export interface ReleaseCase {
@@ -24,8 +25,13 @@ export interface Obstacle {
 /**
  * Everything that keeps this person from releasing this revision; empty when nothing does. Who may release in the program at all is
  * the permissions' affair.
+ * @param standsInFor in whose place the person releases, who may not by a role of their own
  */
-export function releaseObstacles(personId: string, revision: ReleaseCase): Obstacle[] {
+export function releaseObstacles(
+  personId: string,
+  standsInFor: readonly StoodInFor[],
+  revision: ReleaseCase,
+): Obstacle[] {
   const { state, askedBy, assessedBy, outOfDate, newer, unchanged, open } = revision;
   const found: Obstacle[] = [];
   if (state !== "in review")
@@ -36,6 +42,12 @@ export function releaseObstacles(personId: string, revision: ReleaseCase): Obsta
   if (personId === askedBy || personId === assessedBy)
     found.push({
       what: "It is your own work: you ran the assessment or asked for the review.",
+      remedy: "Another process owner of the program has to release it.",
+    });
+  const theirs = standsInFor.find(({ id }) => id === askedBy || id === assessedBy);
+  if (theirs)
+    found.push({
+      what: `It is the work of ${theirs.name}, in whose place you act here.`,
       remedy: "Another process owner of the program has to release it.",
     });
   if (!unchanged)

@@ -1,3 +1,4 @@
+import type { WaferStatus } from "#app/lib/wafer-status.ts";
 import type { WaferFigures } from "#app/lib/wafer-figures.ts";
 
 /** A lot as a list shows it. */
@@ -23,6 +24,7 @@ export interface LotWafer {
   id: string;
   name: string;
   slot: number | null;
+  status: WaferStatus;
   figures: WaferFigures;
   scans: number;
   /** files that wait for their partner */

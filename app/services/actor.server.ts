@@ -8,6 +8,10 @@ import { inScope, tellPerson } from "#app/server/scope.server.ts";
 export async function actorOf(em: EntityManager, { id, name, email, siteRole }: Person): Promise<Actor> {
   await tellPerson(em, id);
   const memberships = await em.find(Membership, { person: id }, { populate: ["program"] });
+  const stoodInFor = await em.execute<{ program_id: string; person_id: string; name: string }[]>(
+    "select * from people_stood_in_for(?)",
+    [id],
+  );
   return {
     id,
     name,
@@ -18,6 +22,9 @@ export async function actorOf(em: EntityManager, { id, name, email, siteRole }: 
       programName: program.name,
       programSlug: program.slug,
       role,
+      standsInFor: stoodInFor
+        .filter(({ program_id }) => program_id === program.id)
+        .map(({ person_id, name: of }) => ({ id: person_id, name: of })),
     })),
   };
 }

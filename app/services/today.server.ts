@@ -8,8 +8,10 @@ import type { TodayAssessed, TodayFlow, TodayGroup, TodayProgram, TodayView } fr
 import { inScope, type ActorScope } from "#app/server/scope.server.ts";
 import { outOfDateAmong } from "./assessments/out-of-date.server.ts";
 import { demoIsHere, demoPrograms } from "./demo/demo-view.server.ts";
+import { lotsOfToday } from "./floor/today-lots.server.ts";
 import { keptGroups } from "./kept/kept-rows.server.ts";
 import { latestScans } from "./scans.server.ts";
+import { sheetsOfToday } from "./sheets/today-sheets.server.ts";
 
 const LATEST_SCANS = 4;
 
@@ -32,6 +34,8 @@ export async function todayView(scope: ActorScope): Promise<TodayView> {
       mayUpload: programsWhere(actor, "upload scans").length > 0,
       demo: mayOnSite(actor, "load and remove the demo") ? await demoOf(em) : null,
       kept: await keptGroups(em, scope),
+      sheets: await sheetsOfToday(em, scope),
+      lots: works.length === 0 ? { blocked: nothing, toMove: nothing } : await lotsOfToday(em, scope),
     };
     if (works.length === 0)
       return {

@@ -151,6 +151,7 @@ export async function ternIds(engineer: APIRequestContext): Promise<DoorIds> {
     readingId,
     jobId,
     kind: "carriers",
+    number: "1",
     "*": "nowhere/at/all",
   };
 }

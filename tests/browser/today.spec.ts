@@ -20,7 +20,7 @@ test("counts lead to the lists of that program", async ({ page }) => {
 
 test("a guest sees their program and nothing of the others", async ({ page }) => {
   await signInAtToday(page, "guest");
-  await expect(page.getByText("What is released to you stands under Sheets.")).toBeVisible();
+  await expect(page.getByText(/sheets? (is|are) in force for your programs\./)).toBeVisible();
   const main = page.getByRole("main");
   await expect(main).toContainText("Tern");
   for (const name of ["Petrel", "Fulmar", "Flows", "Stacks"]) await expect(main).not.toContainText(name);

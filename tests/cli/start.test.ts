@@ -82,7 +82,7 @@ describe("npm start", { timeout: 60_000 }, () => {
   it("runs a worker with the plain role alone, and starts it again when it is killed", async () => {
     const { command } = await serve();
     const worker = () => project.processes("app/jobs/worker.ts").map(({ pid }) => pid);
-    await expect.poll(worker, { timeout: 10_000 }).toHaveLength(1);
+    await expect.poll(worker, { timeout: 30_000 }).toHaveLength(1);
     const told = () => project.read("workers.log").trimEnd().split("\n");
     await expect
       .poll(() => JSON.parse(told().at(-1) ?? "") as object)
@@ -92,7 +92,7 @@ describe("npm start", { timeout: 60_000 }, () => {
       });
     const [first] = worker();
     project.kill("app/jobs/worker.ts");
-    await expect.poll(() => worker().filter((pid) => pid !== first), { timeout: 10_000 }).toHaveLength(1);
+    await expect.poll(() => worker().filter((pid) => pid !== first), { timeout: 30_000 }).toHaveLength(1);
     expect((await fetch(`http://127.0.0.1:${port}/`)).status).toBe(200);
     command.child.kill("SIGTERM");
     expect(await command.ends()).toBe(0);

@@ -105,7 +105,7 @@ export class StubProject {
 
   /** Waits until nothing works for this project any more. */
   async isStill(): Promise<void> {
-    await expect.poll(() => this.processes(), { timeout: 15_000, interval: 50 }).toEqual([]);
+    await expect.poll(() => this.processes(), { timeout: 30_000, interval: 50 }).toEqual([]);
   }
 
   kill(...parts: string[]): void {
@@ -146,7 +146,7 @@ export class Command {
 
   /** Waits until the command has printed something; what it printed instead is shown when it does not. */
   async prints(text: string): Promise<void> {
-    await expect.poll(() => this.output, { timeout: 20_000, interval: 50 }).toContain(text);
+    await expect.poll(() => this.output, { timeout: 30_000, interval: 50 }).toContain(text);
   }
 
   /** Waits for its end. */

@@ -24,10 +24,15 @@ const PROGRAM_TABLE: Record<keyof typeof PROGRAM_PERMISSIONS, string> = {
   "edit stacks and flows": "- - - y y -",
   "run assessments": "    - - - y y -",
   "see the outbox": "     - - - - y y",
+  "name a delegate": "    - - - - y -",
   "ask for a review": "   - - - y y -",
   "comment in a review": "- y y y y -",
   "record deviations": "  - - - y y -",
   "release, return and withdraw sheets": "- - - - y -",
+  "assign sheets to lots": "- - - y y -",
+  "work on the floor": "  - y y y y -",
+  "hold lots and clear what the shift can": "- - y - y -",
+  "clear every hold and stop": "- - - - y -",
   "report incidents": "   - y y y y -",
   "follow up incidents": "- - - y y -",
 };
@@ -104,6 +109,7 @@ test("an engineer is offered the places in the order of the job", () => {
     "Carriers & bonds",
     "Scans",
     "Sheets",
+    "Floor",
     "Method",
   ]);
 });

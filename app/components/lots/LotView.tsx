@@ -5,10 +5,12 @@ import type { LotDetail } from "#app/schemas/lot-view.ts";
 import { LotMaps } from "./LotMaps.tsx";
 import { LotNote } from "./LotNote.tsx";
 import { LotTables } from "./LotTables.tsx";
+import { WaferStatus } from "./WaferStatus.tsx";
+import type { LotAnswer } from "./lot-answer.ts";
 import { LotWafers } from "./LotWafers.tsx";
 
 /** A lot: its wafers by slot with the newest figures, the maps of those that have one, and the tables that all of it came from. */
-export function LotView({ lot, query }: { lot: LotDetail; query: string }) {
+export function LotView({ lot, query, answer }: { lot: LotDetail; query: string; answer: LotAnswer }) {
   const { wafers, maps, tables, program } = lot;
   const wanted = query.toLowerCase();
   const shown = wafers.filter(
@@ -20,7 +22,10 @@ export function LotView({ lot, query }: { lot: LotDetail; query: string }) {
       <LotNote lot={lot} />
       <ListHead what="wafers and slots" />
       {shown.length > 0 ? (
-        <LotWafers wafers={shown} />
+        <>
+          <LotWafers wafers={shown} />
+          {lot.mayUpload && <WaferStatus wafers={shown} answer={answer} />}
+        </>
       ) : (
         <EmptyState title={query === "" ? "No wafer of this lot is known" : "No wafer fits"}>
           {query === ""

@@ -34,6 +34,7 @@ export function LotWafers({ wafers }: { wafers: readonly LotWafer[] }) {
                 Slot
               </th>
               <th scope="col">Wafer</th>
+              <th scope="col">Stands</th>
               {WAFER_FIGURES.map((name) => (
                 <th key={name} scope="col" className="num min-w-24">
                   {HEADS[name].head}
@@ -48,7 +49,7 @@ export function LotWafers({ wafers }: { wafers: readonly LotWafer[] }) {
             </tr>
           </thead>
           <tbody>
-            {wafers.map(({ id, slot, name, figures, scans, waiting }) => (
+            {wafers.map(({ id, slot, name, status, figures, scans, waiting }) => (
               <tr key={id}>
                 <td className="num">{slot ?? <span className="text-quiet">–</span>}</td>
                 <th scope="row" className="min-w-24 font-normal">
@@ -56,6 +57,7 @@ export function LotWafers({ wafers }: { wafers: readonly LotWafer[] }) {
                     {name}
                   </Link>
                 </th>
+                <td className={status === "broken" || status === "scrapped" ? "font-semibold" : ""}>{status}</td>
                 {WAFER_FIGURES.map((figure) => (
                   <td key={figure} className="num">
                     <Figure figure={figures[figure]} name={figure} told={ways[figure] !== null} />

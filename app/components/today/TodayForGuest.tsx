@@ -1,13 +1,15 @@
 import { Link } from "react-router";
 import { KeptSections } from "#app/components/kept/KeptSections.tsx";
 import { EmptyState } from "#app/components/ui/EmptyState.tsx";
+import { headlineForGuest } from "#app/lib/today-groups.ts";
 import type { TodayView } from "#app/schemas/today.ts";
 import { TodayHead } from "./TodayHead.tsx";
 import { TodayPrograms } from "./TodayPrograms.tsx";
+import { ReleasedLately } from "./TodaySheets.tsx";
 
 /** Today for a guest: their programs, and the sheets that were released to them. */
 export function TodayForGuest({ view }: { view: TodayView }) {
-  const { programs, now } = view;
+  const { programs, sheets, now } = view;
   if (programs.length === 0)
     return (
       <>
@@ -17,19 +19,22 @@ export function TodayForGuest({ view }: { view: TodayView }) {
     );
   return (
     <>
-      <TodayHead sentence="What is released to you stands under Sheets." now={now} />
+      <TodayHead sentence={headlineForGuest(sheets.inForce)} now={now} />
       <div className="grid gap-x-12 gap-y-6 wide:grid-cols-[minmax(0,1fr)_384px]">
-        <EmptyState
-          title="Handling-risk sheets"
-          actions={
-            <Link to="/sheets" className="btn btn-primary">
-              Go to the sheets
-            </Link>
-          }
-        >
-          A sheet says at which steps a wafer of your program needs support, and what must not happen to it. It stands
-          under Sheets as soon as the process owner has released it, and only as long as it is in force.
-        </EmptyState>
+        <div className="min-w-0">
+          <ReleasedLately sheets={sheets} />
+          <EmptyState
+            title="Handling-risk sheets"
+            actions={
+              <Link to="/sheets" className="btn btn-primary">
+                Go to the sheets
+              </Link>
+            }
+          >
+            A sheet says at which steps a wafer of your program needs support, and what must not happen to it. It stands
+            under Sheets as soon as the process owner has released it, and only as long as it is in force.
+          </EmptyState>
+        </div>
         <div className="space-y-6">
           <KeptSections groups={view.kept} />
           <TodayPrograms programs={programs} works={false} />

@@ -8,11 +8,13 @@ import { LoadDemo } from "#app/components/demo/LoadDemo.tsx";
 import { FirstSteps } from "./FirstSteps.tsx";
 import { TodayAssessedRow } from "./TodayAssessedRow.tsx";
 import { DemoTold, TodayDemo } from "./TodayDemo.tsx";
+import { LotsThatWait } from "./TodayLots.tsx";
 import { TodayHead } from "./TodayHead.tsx";
 import { TodayPrograms } from "./TodayPrograms.tsx";
 import { TodayRow } from "./TodayRow.tsx";
 import { TodayScans } from "./TodayScans.tsx";
 import { TodaySection } from "./TodaySection.tsx";
+import { SheetsOfLate, SheetsThatWait } from "./TodaySheets.tsx";
 
 interface Props {
   view: TodayView;
@@ -33,6 +35,7 @@ export function TodayPage({ view, told }: Props) {
       {demo && <DemoTold told={told} here={demo.here} />}
       <div className="grid gap-x-12 gap-y-6 wide:grid-cols-[minmax(0,1fr)_384px]">
         <div className="min-w-0">
+          <LotsThatWait lots={view.lots} />
           {!mayAssess && scans}
           {flows === 0 && (
             <div className="mb-6 space-y-6">
@@ -40,6 +43,7 @@ export function TodayPage({ view, told }: Props) {
               {demo?.here === false && <LoadDemo />}
             </div>
           )}
+          <SheetsThatWait sheets={view.sheets} now={view.now} />
           {decisions.total > 0 && (
             <TodaySection title="Needs a decision" remark="oldest first" more={moreOf(decisions)}>
               <ul>
@@ -78,6 +82,7 @@ export function TodayPage({ view, told }: Props) {
               </ul>
             </TodaySection>
           )}
+          <SheetsOfLate sheets={view.sheets} />
           {mayAssess && scans}
           {decisions.total + outOfDate.total + view.scans.length > 0 && (
             <p className="text-label text-quiet">Bow lines on this page ×{exaggeration}; rolled wafers ×1.</p>

@@ -4,6 +4,7 @@ import { BondingMaterial } from "./bonding-material.ts";
 import { Carrier } from "./carrier.ts";
 import { CarrierUnit } from "./carrier-unit.ts";
 import { Credential } from "./credential.ts";
+import { Delegation } from "./delegation.ts";
 import { DemoRecord } from "./demo-record.ts";
 import { Equipment } from "./equipment.ts";
 import { Favourite } from "./favourite.ts";
@@ -51,6 +52,10 @@ import { SheetFile } from "./sheet-file.ts";
 import { SheetComment } from "./sheet-comment.ts";
 import { Deviation } from "./deviation.ts";
 import { SheetPrint } from "./sheet-print.ts";
+import { FloorEntry } from "./floor-entry.ts";
+import { LotHold } from "./lot-hold.ts";
+import { LotSheet } from "./lot-sheet.ts";
+import { StepStop } from "./step-stop.ts";
 import { Incident } from "./incident.ts";
 import { IncidentNote } from "./incident-note.ts";
 import { IncidentPhoto } from "./incident-photo.ts";
@@ -87,6 +92,7 @@ export const entities = [
   SheetComment,
   Deviation,
   SheetPrint,
+  Delegation,
   Incident,
   IncidentNote,
   IncidentPhoto,
@@ -103,6 +109,10 @@ export const entities = [
   Wafer,
   WaferScan,
   WaferMeasurement,
+  LotSheet,
+  FloorEntry,
+  LotHold,
+  StepStop,
   Scan,
   Job,
   RecentVisit,

@@ -1,4 +1,5 @@
 import { defineEntity, p, type InferEntity } from "@mikro-orm/core";
+import type { WaferStatus } from "#app/lib/wafer-status.ts";
 import { Lot } from "./lot.ts";
 import { Person } from "./person.ts";
 import { Program } from "./program.ts";
@@ -20,6 +21,7 @@ export const Wafer = defineEntity({
     /** place in the cassette, as the tool counts; null where nobody has said */
     slot: p.integer().nullable(),
     name: p.text(),
+    status: p.text().$type<WaferStatus>().default("in line"),
     createdAt: p.datetime(),
     createdBy: () => p.manyToOne(Person),
   },

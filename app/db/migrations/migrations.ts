@@ -22,6 +22,8 @@ import { DemoComesAndGoes } from "./2026-12-09-demo-comes-and-goes.ts";
 import { Mail } from "./2026-12-10-mail.ts";
 import { ReviewAndRelease } from "./2026-12-10-review-and-release.ts";
 import { SiteSetting } from "./2026-12-11-site-setting.ts";
+import { Delegations } from "./2026-12-12-delegations.ts";
+import { LotsAndFloor } from "./2026-12-13-lots-and-floor.ts";
 import { Incidents } from "./2026-12-14-incidents.ts";
 
 /** Every migration in the order in which it runs. */
@@ -50,5 +52,7 @@ export const migrations = [
   { name: "2026-12-10-mail", class: Mail },
   { name: "2026-12-10-review-and-release", class: ReviewAndRelease },
   { name: "2026-12-11-site-setting", class: SiteSetting },
+  { name: "2026-12-12-delegations", class: Delegations },
+  { name: "2026-12-13-lots-and-floor", class: LotsAndFloor },
   { name: "2026-12-14-incidents", class: Incidents },
 ];

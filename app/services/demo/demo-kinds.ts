@@ -2,7 +2,14 @@ import type { DemoTable } from "#app/lib/demo-tables.ts";
 
 /** A kind of record that goes with the demo; SQL of its columns is of `x`. */
 export interface DemoKind {
-  table: DemoTable | "incident" | "film_stress_value" | "step_measurement" | "wafer_measurement" | "wafer_scan";
+  table:
+    | DemoTable
+    | "incident"
+    | "film_stress_value"
+    | "sheet_revision"
+    | "step_measurement"
+    | "wafer_measurement"
+    | "wafer_scan";
   one: string;
   many: string;
   /** which rows go: of `programs` of the demo, or of what of its library is not among the `kept` */
@@ -47,6 +54,11 @@ export const DEMO_KINDS: readonly DemoKind[] = [
   ofProgram("stack", "stack", `x.name || ', ' || ${PROGRAM_NAME}`, edited),
   ofProgram("flow", "flow", `x.name || ', ' || ${PROGRAM_NAME}`, edited),
   ofProgram("assessment", "assessment", "x.flow_name || ', number ' || x.number"),
+  ofProgram("sheet_revision", "revision of a sheet", "x.title", {
+    many: "revisions of sheets",
+    by: "x.asked_by_id",
+    at: "x.asked_at",
+  }),
   ofProgram("step_measurement", "bow measured after a step", "x.wafer || ', ' || x.step_title", {
     many: "bows measured after a step",
   }),

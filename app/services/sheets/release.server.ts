@@ -9,6 +9,7 @@ import { sheetDocumentOf } from "#app/lib/sheet/sheet-document-of.ts";
 import { sheetNumber } from "#app/lib/sheet-number.ts";
 import { changesInLines } from "#app/lib/since-release.ts";
 import { statusPath } from "#app/lib/status-path.ts";
+import { inPlaceOf } from "#app/policies/permissions.ts";
 import { releaseObstacles } from "#app/policies/release.ts";
 import type { SheetDocument as Document } from "#app/schemas/sheet-document.ts";
 import { problem } from "#app/server/problem.server.ts";
@@ -71,7 +72,7 @@ async function prepare(
     effectiveFrom: at.toISOString(),
     preparedBy: assessment.createdBy.name,
     checkedBy: scope.actor.name,
-    releasedBy: scope.actor.name,
+    releasedBy: signatureOf(scope, revision.program.id),
     statusAddress: `${origin}${statusPath(token)}`,
     changes,
     deviations,
@@ -84,10 +85,16 @@ async function prepare(
   return { at, token, number, changes, basis, documents };
 }
 
+/** Who signs, and in whose place where it is in somebody's. */
+function signatureOf({ actor }: ActorScope, programId: string): string {
+  const [owner] = inPlaceOf(actor, RELEASE, programId);
+  return owner ? `${actor.name}, for ${owner.name}` : actor.name;
+}
+
 /** Everything that a release rests on, as it is now. @throws 409 when something stands in the way */
 async function standing(em: EntityManager, scope: ActorScope, revision: FoundRevision) {
   const { releaseCase, assessment, deviations, blocking } = await releaseCaseOf(em, scope, revision);
-  const obstacles = releaseObstacles(scope.actor.id, releaseCase);
+  const obstacles = releaseObstacles(scope.actor.id, inPlaceOf(scope.actor, RELEASE, revision.program.id), releaseCase);
   if (obstacles.length > 0) throw problem(409, obstacles.map(({ what, remedy }) => `${what} ${remedy}`).join(" "));
   await em.populate(assessment, ["createdBy"]);
   const last = await lastReleased(em, scope, revision.sheet.id, assessment);

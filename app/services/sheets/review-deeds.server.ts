@@ -3,7 +3,7 @@ import type { EntityManager } from "@mikro-orm/postgresql";
 import { Deviation } from "#app/db/entities/deviation.ts";
 import { SheetComment } from "#app/db/entities/sheet-comment.ts";
 import { blockingFindings } from "#app/lib/blocking-findings.ts";
-import { mayInProgram, type ProgramPermission } from "#app/policies/permissions.ts";
+import { inPlaceOf, mayInProgram, type ProgramPermission } from "#app/policies/permissions.ts";
 import type { ReviewForm } from "#app/schemas/review-form.ts";
 import { notFound, problem } from "#app/server/problem.server.ts";
 import { inScope, type ActorScope } from "#app/server/scope.server.ts";
@@ -11,6 +11,8 @@ import { findAssessment } from "../assessments/assessments.server.ts";
 import { requireInProgram } from "../permission.server.ts";
 import { lockedRevision, type FoundRevision } from "./revision.server.ts";
 import { tellReviewReturned } from "./tell.server.ts";
+
+const RELEASE = "release, return and withdraw sheets";
 
 type Values<Intent extends ReviewForm["intent"]> = Omit<Extract<ReviewForm, { intent: Intent }>, "intent">;
 
@@ -74,11 +76,13 @@ export async function recordDeviation(scope: ActorScope, revisionId: string, val
 /** The second signature under a deviation, of a process owner who did not record it. */
 export async function signDeviation(scope: ActorScope, revisionId: string, { deviation: id }: Values<"sign">) {
   await inScope(scope, async (em) => {
-    const revision = await inReview(em, scope, revisionId, "release, return and withdraw sheets");
+    const revision = await inReview(em, scope, revisionId, RELEASE);
     const deviation = await em.findOne(Deviation, { id, revision: revision.id });
     if (!deviation) throw notFound("deviation");
     if (deviation.createdBy.id === scope.actor.id)
       throw problem(403, "You recorded this deviation: the second signature is another process owner's.");
+    if (inPlaceOf(scope.actor, RELEASE, revision.program.id).some(({ id: owner }) => owner === deviation.createdBy.id))
+      throw problem(403, "You act in the place of who recorded this deviation: the second signature is another's.");
     if (deviation.signedAt) throw problem(409, "This deviation has its second signature already.");
     if (deviation.until <= new Date())
       throw problem(409, "This deviation has expired. Record one that lasts, if its reason still holds.");
@@ -93,8 +97,7 @@ export async function returnRevision(scope: ActorScope, revisionId: string, { re
     const revision = await lockedRevision(em, scope, revisionId);
     const own =
       revision.askedBy.id === scope.actor.id && mayInProgram(scope.actor, "ask for a review", revision.program.id);
-    if (!own)
-      requireInProgram(scope, "release, return and withdraw sheets", revision.program.id, "revision of a sheet");
+    if (!own) requireInProgram(scope, RELEASE, revision.program.id, "revision of a sheet");
     if (revision.state !== "in review")
       throw problem(409, `This revision is ${revision.state} already. Open the page again to see by whom.`);
     Object.assign(revision, { state: "returned", decidedAt: new Date(), decidedBy: scope.actor.id, reason });

@@ -7,7 +7,7 @@ import { revisionLetters } from "#app/lib/assessment-revision.ts";
 import { blockingFindings } from "#app/lib/blocking-findings.ts";
 import { sheetNumber } from "#app/lib/sheet-number.ts";
 import { sinceRelease } from "#app/lib/since-release.ts";
-import { mayInProgram } from "#app/policies/permissions.ts";
+import { inPlaceOf, mayInProgram } from "#app/policies/permissions.ts";
 import { releaseObstacles } from "#app/policies/release.ts";
 import type { ReviewRevision, ReviewView } from "#app/schemas/review-view.ts";
 import { inScope, type ActorScope } from "#app/server/scope.server.ts";
@@ -16,6 +16,8 @@ import { whyNoReview } from "./ask-review.server.ts";
 import { lastReleased } from "./last-released.server.ts";
 import { inForce, releaseCaseOf } from "./release-case.server.ts";
 import { findRevision, newestRevisionOf } from "./revision.server.ts";
+
+const RELEASE = "release, return and withdraw sheets";
 
 /** The review of an assessment, for the people of its program. @throws 404 for who may not see the work */
 export async function reviewPage(scope: ActorScope, assessmentId: string | undefined): Promise<ReviewView> {
@@ -48,8 +50,8 @@ export async function reviewPage(scope: ActorScope, assessmentId: string | undef
         ask: may("ask for a review"),
         comment: inReview && may("comment in a review"),
         deviate: inReview && may("record deviations"),
-        return: inReview && (may("release, return and withdraw sheets") || revision.own),
-        release: inReview && may("release, return and withdraw sheets"),
+        return: inReview && (may(RELEASE) || revision.own),
+        release: inReview && may(RELEASE),
       },
     };
   });
@@ -73,7 +75,10 @@ async function revisionView(em: EntityManager, scope: ActorScope, id: string) {
     decidedBy: revision.decidedBy?.name ?? null,
     reason: revision.reason ?? null,
     letter: revision.number ? revisionLetters(revision.number) : null,
-    obstacles: revision.state === "in review" ? releaseObstacles(scope.actor.id, releaseCase) : [],
+    obstacles:
+      revision.state === "in review"
+        ? releaseObstacles(scope.actor.id, inPlaceOf(scope.actor, RELEASE, revision.program.id), releaseCase)
+        : [],
     deviations: deviations.map((each) => deviationView(scope, revision, each)),
     comments: comments.map(({ id: comment, step, text, createdAt, createdBy }) => ({
       id: comment,
@@ -91,7 +96,7 @@ function deviationView(
   { state, program }: { state: string; program: { id: string } },
   { id, findings, reason, scope, until, createdAt, createdBy, signedAt, signedBy }: Deviation,
 ) {
-  const owner = mayInProgram(actor, "release, return and withdraw sheets", program.id);
+  const hands = [actor.id, ...inPlaceOf(actor, RELEASE, program.id).map(({ id: owner }) => owner)];
   return {
     id,
     findings,
@@ -103,6 +108,11 @@ function deviationView(
     signedAt: signedAt?.toISOString() ?? null,
     signedBy: signedBy?.name ?? null,
     inForce: inForce({ signedAt, until }),
-    maySign: state === "in review" && !signedAt && owner && createdBy.id !== actor.id && until > new Date(),
+    maySign:
+      state === "in review" &&
+      !signedAt &&
+      mayInProgram(actor, RELEASE, program.id) &&
+      !hands.includes(createdBy.id) &&
+      until > new Date(),
   };
 }

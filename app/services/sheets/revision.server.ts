@@ -76,6 +76,8 @@ export interface ProgramPerson {
   id: string;
   name: string;
   role: "guest" | "technician" | "engineer" | "process owner";
+  /** stands in for a process owner now */
+  stands_in: boolean;
 }
 
 /** The active people of a program; nobody for who is not of its staff. */

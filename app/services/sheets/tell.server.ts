@@ -6,10 +6,12 @@ import type { ActorScope } from "#app/server/scope.server.ts";
 import { announce } from "../mail/announce.server.ts";
 import { findRevision, peopleOf, type FoundRevision } from "./revision.server.ts";
 
-/** Tells the process owners of the program that a review waits for one of them. */
+/** Tells the process owners of the program, and who stands in for one, that a review waits for one of them. */
 export async function tellReviewAsked(em: EntityManager, scope: ActorScope, revisionId: string): Promise<void> {
   const revision = await findRevision(em, scope, revisionId);
-  const owners = (await peopleOf(em, revision.program.id)).filter(({ role }) => role === "process owner");
+  const owners = (await peopleOf(em, revision.program.id)).filter(
+    ({ role, stands_in }) => role === "process owner" || stands_in,
+  );
   const path = reviewPath(revision);
   await tell(
     em,

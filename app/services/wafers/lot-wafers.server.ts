@@ -26,9 +26,10 @@ export async function lotWafers(
   const byWafer = <Row extends { wafer?: { id: string } | null }>(rows: readonly Row[], id: string) =>
     rows.filter(({ wafer }) => wafer?.id === id);
   return {
-    wafers: wafers.map(({ id, name, slot }) => ({
+    wafers: wafers.map(({ id, name, slot, status }) => ({
       id,
       name,
+      status,
       slot: slot ?? null,
       figures: newestFigures(
         byWafer(measurements, id).map((each) => ({ content: each.content, on: dayOf(each) })),

@@ -2,11 +2,20 @@ import { createRoutesStub } from "react-router";
 import { describe, expect, it } from "vitest";
 import { TodayForGuest } from "#app/components/today/TodayForGuest.tsx";
 import { TodayPage } from "#app/components/today/TodayPage.tsx";
-import type { TodayAssessed, TodayView } from "#app/schemas/today.ts";
+import type { TodayAssessed, TodaySheet, TodayView } from "#app/schemas/today.ts";
 import { render, words } from "#tests/components/drawings/render.ts";
 import { strangeCharacters } from "#tests/components/glyphs.ts";
 
 const none = { rows: [], total: 0 };
+const SHEETS: TodayView["sheets"] = {
+  toRelease: none,
+  toSign: none,
+  returned: none,
+  asked: none,
+  lapsing: none,
+  lately: none,
+  inForce: 0,
+};
 const PROGRAM = { id: "1", name: "Tern", slug: "tern", diameter: 0.2, purpose: "To 100 µm", flows: 1, stacks: 1 };
 const EMPTY: TodayView = {
   now: "2026-12-01T07:40:00.000Z",
@@ -17,6 +26,8 @@ const EMPTY: TodayView = {
   outOfDate: none,
   notAssessed: none,
   scans: [],
+  sheets: SHEETS,
+  lots: { blocked: none, toMove: none },
   programs: [PROGRAM],
   kept: [],
   demo: null,
@@ -53,6 +64,29 @@ describe("Today", () => {
     expect(markup).toContain('href="/assessments/assessment"');
     expect(markup).toContain('aria-label="See why: Tern T-2, assessment N"');
     expect(strangeCharacters(markup)).toEqual([]);
+  });
+
+  it("puts first what waits for the reader, and leads a sheet in force to its page", () => {
+    const row: TodaySheet = {
+      id: "revision",
+      revisionId: "revision",
+      assessmentId: "assessment",
+      name: "TERN-H003",
+      released: false,
+      state: "in review",
+      title: "Tern T-2",
+      program: "Tern",
+      at: "2026-11-30T08:00:00.000Z",
+      words: "For lot T-0412",
+    };
+    const released: TodaySheet = { ...row, name: "TERN-H002 B", released: true, state: "released", words: "" };
+    const sheets = { ...SHEETS, toRelease: { rows: [row], total: 1 }, lately: { rows: [released], total: 1 } };
+    const markup = shown({ ...EMPTY, sheets, decisions: { rows: [ASSESSED], total: 1 } });
+    expect(words(markup)).toMatch(
+      /For you to review oldest first TERN-H003, Tern T-2 For lot T-0412 Tern since 2026-11-30 Review .*Needs a decision .*Sheets of late/,
+    );
+    expect(markup).toContain('href="/assessments/assessment/review"');
+    expect(markup).toContain('href="/sheets/revisions/revision"');
   });
 
   it("offers to run again only to those who may", () => {
@@ -102,7 +136,7 @@ describe("Today", () => {
 
   it("shows a guest programs and no counts, and where sheets stand", () => {
     const guest = text({ ...EMPTY, works: false, mayAssess: false, mayUpload: false });
-    expect(guest).toMatch(/^Today What is released to you stands under Sheets\./);
+    expect(guest).toMatch(/^Today No sheet is in force for your programs\./);
     expect(guest).toMatch(/Tern To 100 µm 200 mm/);
     expect(guest).not.toMatch(/Flows|Stacks|scan/);
   });

@@ -1,5 +1,5 @@
 import { describe, expect, it } from "vitest";
-import { groupFlows, headline, SHOWN } from "#app/lib/today-groups.ts";
+import { groupFlows, headline, headlineForGuest, SHOWN } from "#app/lib/today-groups.ts";
 import type { Outcome } from "#app/engine/vocabulary.ts";
 import type { TodayFlow } from "#app/schemas/today.ts";
 
@@ -57,6 +57,8 @@ describe("flows by what they wait for", () => {
   });
 });
 
+const NO_LOTS = { blocked: { total: 0 }, toMove: { total: 0 } };
+
 describe("the sentence at the top", () => {
   it.each<[decisions: number, outOfDate: number, notAssessed: number, sentence: string]>([
     [0, 0, 0, "Nothing waits for a decision."],
@@ -68,10 +70,29 @@ describe("the sentence at the top", () => {
   ])("%i, %i and %i", (decisions, outOfDate, notAssessed, sentence) => {
     expect(
       headline({
+        sheets: { toRelease: { total: 0 }, toSign: { total: 0 }, returned: { total: 0 } },
+        lots: NO_LOTS,
         decisions: { total: decisions },
         outOfDate: { total: outOfDate },
         notAssessed: { total: notAssessed },
       }),
     ).toBe(sentence);
+  });
+
+  it("begins with what waits for the reader alone", () => {
+    const sheets = { toRelease: { total: 2 }, toSign: { total: 1 }, returned: { total: 1 } };
+    const none = { total: 0 };
+    const lots = { blocked: { total: 1 }, toMove: { total: 2 } };
+    expect(headline({ sheets, lots, decisions: { total: 1 }, outOfDate: none, notAssessed: none })).toBe(
+      "Two sheets wait for your review, one deviation waits for your signature, one sheet was returned to you, one lot or step is held, two lots are on old sheets and one flow needs a decision.",
+    );
+  });
+
+  it.each([
+    [0, "No sheet is in force for your programs."],
+    [1, "One sheet is in force for your programs."],
+    [3, "Three sheets are in force for your programs."],
+  ])("of a guest with %i sheets", (inForce, sentence) => {
+    expect(headlineForGuest(inForce)).toBe(sentence);
   });
 });

@@ -32,9 +32,14 @@ export default function Lots({ loaderData }: Route.ComponentProps) {
   const { page, loose, programs, mayUpload } = loaderData;
   const searched = page.params.query !== "" || Object.values(page.params.filters).some(Boolean);
   const importing = mayUpload && (
-    <Link to="/scans/import" className="btn btn-primary">
-      Import scans and summaries
-    </Link>
+    <>
+      <Link to="/scans/import" className="btn">
+        Import scans and summaries
+      </Link>
+      <Link to="/lots/new" className="btn btn-primary">
+        New lots
+      </Link>
+    </>
   );
   const empty = page.total === 0 && !searched;
   return (
@@ -52,7 +57,7 @@ export default function Lots({ loaderData }: Route.ComponentProps) {
         <EmptyState title={searched ? "No lot fits" : "No lots yet"} actions={empty && importing}>
           {searched
             ? "Change the search, or take a filter away."
-            : "A lot stands here as soon as a file is imported that names it: a summary of its wafers, a thickness map, or a scan of one of them."}
+            : "A lot stands here once it is made, with its wafers or without, and as soon as a file is imported that names it: a summary of its wafers, a thickness map, or a scan of one of them."}
         </EmptyState>
       )}
       <LooseWaferList wafers={loose} />

@@ -1,0 +1,53 @@
+import { useState, type FormHTMLAttributes, type ReactNode } from "react";
+import { Form, useSubmit } from "react-router";
+import { newId, useOutbox } from "./use-floor-outbox.ts";
+
+interface Props extends Pick<FormHTMLAttributes<HTMLFormElement>, "id" | "className" | "noValidate"> {
+  action: string;
+  /** what it says, in a few words, while it waits to be sent */
+  words: string;
+  /** where it leads once it was taken, or waits */
+  next: string;
+  children: ReactNode;
+}
+
+/**
+ * A form of the floor. It is kept on the device before it is sent, and until the server has it, so that a lost connection loses nothing;
+ * without scripts it is sent as any form is.
+ */
+export function FloorForm({ action, words, next, children, ...rest }: Props) {
+  const known = useOutbox();
+  const submit = useSubmit();
+  const [busy, setBusy] = useState(false);
+  const send = async (form: FormData) => {
+    if (!known || typeof indexedDB === "undefined") return submit(form, { method: "post", action });
+    const { outbox, person, lot } = known;
+    setBusy(true);
+    const asked = String(form.get("id") ?? "");
+    const id = asked === "" || outbox.queued.some((entry) => entry.id === asked) ? newId() : asked;
+    form.set("id", id);
+    const fields = [...form].map(([name, value]): [string, string] => [name, typeof value === "string" ? value : ""]);
+    const at = new Date().toISOString();
+    const outcome = await outbox.enter({ id, person, lot, words, at, fields, refused: null });
+    setBusy(false);
+    if (outcome === "stored") window.location.assign(next);
+    // Sent once more as a form of the page, which then says beside its fields what is wrong.
+    if (outcome === "refused") await submit(form, { method: "post", action });
+  };
+  return (
+    <Form
+      {...rest}
+      // It leads nowhere that the page has not got, and the device may have no connection to ask.
+      discover="none"
+      method="post"
+      action={action}
+      aria-busy={busy}
+      onSubmit={(event) => {
+        event.preventDefault();
+        if (!busy) void send(new FormData(event.currentTarget, (event.nativeEvent as SubmitEvent).submitter));
+      }}
+    >
+      {children}
+    </Form>
+  );
+}
