@@ -24,6 +24,8 @@ export interface FloorBlock {
 /** The revision of a sheet that a lot is on. */
 export interface PinnedSheet {
   revision: string;
+  /** that it was released from */
+  assessment: string;
   /** 'TERN-H001' */
   number: string;
   letter: string;

@@ -1,4 +1,5 @@
 import type { Browser, Page } from "@playwright/test";
+import sharp from "sharp";
 import { assess, ownFlow, press } from "./flow-pages.ts";
 import { readPrinted } from "./printed-sheet.ts";
 import { expect, signIn, test, type Role } from "./support.ts";
@@ -24,6 +25,13 @@ async function openMail(page: Page, subject: RegExp): Promise<void> {
   await page.getByRole("link", { name: subject }).first().click();
   await expect(page.getByRole("heading", { level: 1 })).toHaveText(subject);
 }
+
+/** How many pages of the floor the device keeps. */
+const keptPages = (page: Page) =>
+  page.evaluate(async () => {
+    const names = (await caches.keys()).filter((each) => each.startsWith("floor-pages-"));
+    return (await Promise.all(names.map(async (each) => (await caches.open(each)).keys()))).flat().length;
+  });
 
 /** Changes the thickness that a flow ends at, by trying it first. */
 async function thinTo(page: Page, flow: string, from: string, to: string): Promise<void> {
@@ -119,13 +127,22 @@ test("the whole life of a sheet, from a flow that is sent back to a paper that i
     desk = new URL(engineer.url()).pathname;
     await technician.goto(`/floor${desk}`);
     await technician.getByRole("button", { name: /^I have read/ }).click();
-    await technician.getByRole("link", { name: /^Go to step 1,/ }).click();
+    await expect.poll(() => keptPages(technician), { timeout: 60_000 }).toBe(20);
+    // The network is cut before the first step and comes back after it.
+    await technician.context().setOffline(true);
+    await technician.goto(`/floor${desk}/steps/1`);
+    await expect(technician.getByText("whether this sheet is still current could not be checked")).toBeVisible();
     await technician.getByRole("button", { name: /^Start this step/ }).click();
     await technician.getByRole("button", { name: /^Step done/ }).click();
-    await expect(technician).toHaveURL(/\/steps\/2$/);
+    await expect(technician.getByText(/^2 entries wait for the connection/)).toBeVisible();
+    await technician.context().setOffline(false);
+    await expect(technician.getByText("2 entries that waited have been sent.")).toBeVisible({ timeout: 30_000 });
+    await engineer.reload();
+    await expect(engineer.getByRole("main")).toContainText("1 of 19 steps entered as done");
   });
 
   await test.step("a step is stopped on the floor, told to the shift lead and cleared", async () => {
+    await technician.goto(`/floor${desk}/steps/2`);
     await technician.getByRole("link", { name: /^Stop this step/ }).click();
     await technician.getByLabel("Cause").selectOption("tool trouble");
     await technician.getByLabel("What happened").fill("The chuck leaks");
@@ -141,6 +158,27 @@ test("the whole life of a sheet, from a flow that is sent back to a paper that i
     await expect(lead.getByText("Nothing holds the lot")).toBeVisible();
     await technician.goto(`/floor${desk}/steps/2`);
     await expect(technician.getByRole("button", { name: /^Start this step/ })).toBeVisible();
+  });
+
+  await test.step("an incident is reported from the step with a photo, told and followed up", async () => {
+    await technician.getByRole("link", { name: /^Report an incident/ }).click();
+    await expect(technician.getByLabel("Lot", { exact: true })).toHaveValue(lot);
+    await technician.getByLabel("What", { exact: true }).selectOption("edge chip");
+    await technician.getByLabel("How bad").selectOption("damaged, goes on");
+    await technician.getByLabel("In your words").fill("Chipped at the notch");
+    await technician.getByLabel("Wafers of the lot that went through").fill("2");
+    const image = sharp({ create: { width: 60, height: 40, channels: 3, background: "#734" } });
+    await technician
+      .getByLabel("Photos")
+      .setInputFiles({ name: "chip.jpg", mimeType: "image/jpeg", buffer: await image.jpeg().toBuffer() });
+    await press(technician, "Report it");
+    await expect(technician.getByRole("img", { name: /^Photo 1 of TERN-I/ })).toBeVisible();
+    const incident = new URL(technician.url()).pathname;
+    await openMail(engineer, new RegExp(`incident with lot ${lot}`));
+    await engineer.goto(incident);
+    await engineer.getByLabel("Note", { exact: true }).fill("Notch finger set anew");
+    await press(engineer, "Add the note");
+    await expect(engineer.getByText("Notch finger set anew")).toBeVisible();
   });
 
   await test.step("a new revision takes its place: the old paper says so, and the lot waits to be moved", async () => {

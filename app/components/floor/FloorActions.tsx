@@ -41,6 +41,10 @@ export function FloorActions(props: FloorStepProps & { blocked: boolean }) {
           <span className="text-lead font-normal text-quiet">This lot alone, tells everybody</span>
         </a>
       )}
+      <a href={reportPath(props)} className={`${ACTION} border-b border-line`}>
+        Report an incident
+        <span className="text-lead font-normal text-quiet">Crack, chip, slip or drop; needs the connection</span>
+      </a>
       <div className="min-h-6 flex-1" />
       <a
         href={to("stop")}
@@ -54,6 +58,13 @@ export function FloorActions(props: FloorStepProps & { blocked: boolean }) {
       </a>
     </div>
   );
+}
+
+/** The form of a report, which knows where the lot is. */
+function reportPath({ lot, sheet, step }: FloorStepProps): string {
+  const asked = new URLSearchParams({ assessment: sheet.pin.assessment, step: String(step.number), lot: lot.id });
+  if (sheet.leg > 0) asked.set("leg", String(sheet.leg));
+  return `/incidents/new?${asked.toString()}`;
 }
 
 /** Starts the step, or says that it is done; where neither can be, why, and the way there. */

@@ -41,10 +41,11 @@ export type Pin = Awaited<ReturnType<typeof pinsOf>>[number];
 
 /** The revision that a lot is on, in words. */
 export async function pinView(em: EntityManager, { revision, ...pin }: Pin, programSlug: string): Promise<PinnedSheet> {
-  const { id, number, title, state, sheet } = revision;
+  const { id, number, title, state, sheet, assessment } = revision;
   const current = state === "released" ? null : await em.findOne(SheetRevision, { sheet: sheet.id, state: "released" });
   return {
     revision: id,
+    assessment: assessment.id,
     number: sheetNumber(programSlug, sheet.number),
     letter: revisionLetters(number ?? 1),
     title,
