@@ -127,6 +127,7 @@ test("the whole life of a sheet, from a flow that is sent back to a paper that i
     desk = new URL(engineer.url()).pathname;
     await technician.goto(`/floor${desk}`);
     await technician.getByRole("button", { name: /^I have read/ }).click();
+    await expect(technician.getByRole("link", { name: /^Go to step 1,/ })).toBeVisible();
     await expect.poll(() => keptPages(technician), { timeout: 60_000 }).toBe(20);
     // The network is cut before the first step and comes back after it.
     await technician.context().setOffline(true);

@@ -10,7 +10,7 @@ export function useFloorWorker(paths: readonly string[]): void {
     if (!import.meta.env.PROD || !("serviceWorker" in navigator)) return;
     if (document.documentElement.dataset["keptAt"] !== undefined) return;
     navigator.serviceWorker
-      .register("/floor/worker.js", { scope: "/floor/" })
+      .register("/floor-worker.js", { scope: "/floor/" })
       .then(activeWorker)
       .then((worker) => worker?.postMessage({ keep: all.split(" ") }))
       .catch(() => undefined);
