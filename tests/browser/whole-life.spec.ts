@@ -6,7 +6,7 @@ import { expect, signIn, test, type Role } from "./support.ts";
 
 /** A person at a browser of their own. */
 async function at(browser: Browser, role: Role, viewport = { width: 1280, height: 900 }): Promise<Page> {
-  const page = await (await browser.newContext({ viewport })).newPage();
+  const page = await (await browser.newContext({ viewport, serviceWorkers: "allow" })).newPage();
   await signIn(page, role);
   return page;
 }

@@ -65,7 +65,10 @@ export const DEMO_KINDS: readonly DemoKind[] = [
   ofProgram("step_measurement", "bow measured after a step", "x.wafer || ', ' || x.step_title", {
     many: "bows measured after a step",
   }),
-  ofProgram("floor_entry", "entry of the floor", "x.kind || ', step ' || x.step", { many: "entries of the floor" }),
+  ofProgram("floor_entry", "entry of the floor", "x.kind || coalesce(', step ' || x.step, '')", {
+    many: "entries of the floor",
+    at: "x.received_at",
+  }),
   ofProgram("lot_hold", "hold of a lot", "x.reason", {
     many: "holds of lots",
     by: "x.opened_by_id",
