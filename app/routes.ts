@@ -129,6 +129,7 @@ export default [
     ...prefix("incidents", [
       index("routes/_app/incidents/list.tsx"),
       route("new", "routes/_app/incidents/new.tsx"),
+      route("rates", "routes/_app/incidents/rates.tsx"),
       route("incidents.csv", "routes/_app/incidents/csv.ts"),
       route(":incidentId", "routes/_app/incidents/incident.tsx"),
       route(":incidentId/photos/:photoId", "routes/_app/incidents/photo.ts"),

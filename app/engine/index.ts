@@ -329,4 +329,5 @@ export {
   type ParityPoint,
 } from "./profile/lot-figures/predicted-against-measured.ts";
 export { acceptedValueWorking, controlLimitsWorking, parityWorking } from "./profile/lot-figures/working.ts";
+export { binomialInterval, type ShareInterval } from "./uncertainty/binomial-interval.ts";
 export { studentFactor } from "./uncertainty/student.ts";

@@ -68,6 +68,7 @@ const WITHIN: (Page & { open: (actor: Actor) => boolean })[] = [
   { name: "Import profiles", path: "/import-profiles", open: (actor) => mayOnSite(actor, "keep import profiles") },
   { name: "Predicted against measured", path: "/predictions", open: seesWork },
   { name: "Incidents", path: "/incidents", also: "breakage, cracks, chips, drops, review board", open: seesWork },
+  { name: "Rates of breakage", path: "/incidents/rates", also: "breakage map, statistics, intervals", open: seesWork },
   {
     name: "Report an incident",
     path: "/incidents/new",

@@ -136,6 +136,7 @@ const DOORS: Record<string, string> = {
   "/jobs": "302 403 200 200 200 200 403",
   "/incidents": "302 403 200 200 200 200 403",
   "/incidents/new": "302 403 200 200 200 200 403",
+  "/incidents/rates": "302 403 200 200 200 200 403",
   "/incidents/incidents.csv": "302 403 200 200 200 200 403",
   "/incidents/:incidentId": "302 404 200 200 200 200 404",
   "/incidents/:incidentId/photos/:photoId": "302 404 200 200 200 200 404",

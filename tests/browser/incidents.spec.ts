@@ -92,6 +92,26 @@ test("a technician reports with a tap and a photo on a phone, an engineer follow
   expect(readFileSync(await table.path(), "utf8")).toContain("Chipped when it was lifted");
 });
 
+test("rates are told with their intervals, on a phone and in the dark", async ({ page }) => {
+  await signIn(page, "engineer");
+  await page.goto("/incidents");
+  await page.getByRole("link", { name: "Rates", exact: true }).click();
+  await expect(page.getByRole("heading", { level: 1, name: "Rates of breakage" })).toBeVisible();
+  await expect(page.getByRole("region", { name: "Breakage map" })).toBeVisible();
+  await expect(page.getByRole("table", { name: "By support" })).toContainText(/\d\s%\s\(/);
+  await page.emulateMedia({ colorScheme: "dark" });
+  await expectNoAxeFindings(page);
+  for (const width of [390, 320]) {
+    await page.setViewportSize({ width, height: 844 });
+    expect(await page.evaluate(() => document.documentElement.scrollWidth <= innerWidth)).toBe(true);
+  }
+  await page.setViewportSize({ width: 1280, height: 900 });
+  await page.getByLabel("Program").selectOption({ label: "Fulmar" });
+  await page.getByRole("button", { name: "Show" }).click();
+  await expect(page).toHaveURL(/program=fulmar/);
+  await expect(page.getByRole("main")).toContainText("Nothing is known yet");
+});
+
 test.describe("without scripts", () => {
   test.use({ javaScriptEnabled: false });
 

@@ -74,6 +74,9 @@ export function IncidentList({ page, programs, mayReport }: Props) {
         remark={`${page.total} ${searched ? "found" : page.total === 1 ? "incident" : "incidents"}`}
         actions={
           <>
+            <Link to="/incidents/rates" className="btn">
+              Rates
+            </Link>
             <Link to="/predictions" className="btn">
               Predicted against measured
             </Link>

@@ -66,6 +66,13 @@ export const STATISTICS = {
       "every answer put back into the full model; roots closer than two turns between neighbouring places are missed",
     basis: "own derivation",
   },
+  "clopper-pearson-1934": {
+    author: "C. J. Clopper, E. S. Pearson",
+    title: "The use of confidence or fiducial limits illustrated in the case of the binomial",
+    year: 1934,
+    place: "Biometrika 26, page 404",
+    basis: memory,
+  },
   "levenberg-1944": {
     author: "K. Levenberg",
     title: "A method for the solution of certain non-linear problems in least squares",
