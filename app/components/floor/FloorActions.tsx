@@ -25,26 +25,33 @@ export function FloorActions(props: FloorStepProps & { blocked: boolean }) {
           <MainAction {...props} />
         </div>
       )}
-      <a href={to("measure")} className={`${ACTION} border-b border-line`}>
-        Record a reading
-        <span className="text-lead font-normal text-quiet">
-          {last ? `Last here: ${entryWords(last.content)}` : "Bow or warp, and how it was measured"}
-        </span>
-      </a>
-      <a href={to("observe")} className={`${ACTION} border-b border-line`}>
-        Write an observation
-        <span className="text-lead font-normal text-quiet">What you saw, how many wafers</span>
-      </a>
-      {lot.mayHold && (
-        <a href={to("hold")} className={`${ACTION} border-b border-line`}>
-          Hold this lot
-          <span className="text-lead font-normal text-quiet">This lot alone, tells everybody</span>
+      {/* In pairs on a tablet, so that stopping stays in sight at the foot. */}
+      <div className="tablet:grid tablet:grid-cols-2 tablet:[&>*:nth-child(odd):not(:last-child)]:border-r">
+        <a href={to("measure")} className={`${ACTION} border-b border-line tablet:px-4`}>
+          Record a reading
+          <span className="text-lead font-normal text-quiet">
+            {last ? `Last here: ${entryWords(last.content)}` : "Bow or warp"}
+          </span>
         </a>
-      )}
-      <a href={reportPath(props)} className={`${ACTION} border-b border-line`}>
-        Report an incident
-        <span className="text-lead font-normal text-quiet">Crack, chip, slip or drop; needs the connection</span>
-      </a>
+        <a href={to("observe")} className={`${ACTION} border-b border-line tablet:px-4`}>
+          Write an observation
+        </a>
+        <a
+          href={reportPath(props)}
+          className={`${ACTION} border-b border-line tablet:px-4 ${lot.mayHold ? "" : "tablet:col-span-2"}`}
+        >
+          Report an incident
+          <span className={`text-lead font-normal text-quiet ${lot.mayHold ? "tablet:hidden" : ""}`}>
+            Crack, chip, slip or drop; needs the connection
+          </span>
+        </a>
+        {lot.mayHold && (
+          <a href={to("hold")} className={`${ACTION} border-b border-line tablet:px-4`}>
+            Hold this lot
+            <span className="text-lead font-normal text-quiet">This lot alone</span>
+          </a>
+        )}
+      </div>
       <div className="min-h-6 flex-1" />
       <a
         href={to("stop")}

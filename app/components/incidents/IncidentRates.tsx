@@ -1,7 +1,6 @@
 import { Form, Link } from "react-router";
 import { PageHead } from "#app/components/layout/PageHead.tsx";
 import { EmptyState } from "#app/components/ui/EmptyState.tsx";
-import { SelectField } from "#app/components/ui/SelectField.tsx";
 import { ratesSentence } from "#app/lib/rate-words.ts";
 import type { IncidentRatesView } from "#app/schemas/incident-rates.ts";
 import { BreakageMap } from "./BreakageMap.tsx";
@@ -23,7 +22,17 @@ export function IncidentRates({ rates, program, programs }: IncidentRatesView) {
       />
       {programs.length > 1 && (
         <Form method="get" className="screen-only mb-4 flex flex-wrap items-end gap-3">
-          <SelectField name="program" label="Program" options={programs} blank="All of yours" defaultValue={program} />
+          <div className="field">
+            <label htmlFor="rates-program">Program</label>
+            <select id="rates-program" name="program" defaultValue={program}>
+              <option value="">All of yours</option>
+              {programs.map(({ value, label }) => (
+                <option key={value} value={value}>
+                  {label}
+                </option>
+              ))}
+            </select>
+          </div>
           <button type="submit" className="btn">
             Show
           </button>

@@ -9,6 +9,9 @@ interface Props {
   all: RateRow;
 }
 
+/** Left out on a phone, where the rate stands with the counts that it is of. */
+const WIDE = "max-tablet:hidden print:table-cell";
+
 const AGAINST = { above: "above the rest", below: "below the rest" };
 
 /** Counts and rates of one way to part the steps. */
@@ -20,20 +23,13 @@ export function RateTable({ caption, head, rows, all }: Props) {
         <thead>
           <tr>
             <th scope="col">{head}</th>
+            {["Incidents", "Affected", "Broken", "Went through"].map((counted) => (
+              <th key={counted} scope="col" className={`num ${WIDE}`}>
+                {counted}
+              </th>
+            ))}
             <th scope="col" className="num">
-              Incidents
-            </th>
-            <th scope="col" className="num max-tablet:hidden print:table-cell">
-              Affected
-            </th>
-            <th scope="col" className="num">
-              Broken
-            </th>
-            <th scope="col" className="num">
-              Went through
-            </th>
-            <th scope="col" className="num">
-              Broken, %
+              Broken of these
             </th>
           </tr>
         </thead>
@@ -43,10 +39,10 @@ export function RateTable({ caption, head, rows, all }: Props) {
               <th scope="row" className="text-left font-normal wrap-anywhere">
                 {row.name}
               </th>
-              <td className="num">{row.incidents}</td>
-              <td className="num max-tablet:hidden print:table-cell">{row.affected}</td>
-              <td className="num">{row.broken}</td>
-              <td className="num">
+              <td className={`num ${WIDE}`}>{row.incidents}</td>
+              <td className={`num ${WIDE}`}>{row.affected}</td>
+              <td className={`num ${WIDE}`}>{row.broken}</td>
+              <td className={`num ${WIDE}`}>
                 {row.through > 0 ? row.through : "–"}
                 {row.uncounted > 0 && (
                   <span className="block text-label text-quiet">
@@ -56,6 +52,9 @@ export function RateTable({ caption, head, rows, all }: Props) {
               </td>
               <td className="num">
                 <Rate row={row} all={all} />
+                <span className="block text-label text-quiet tablet:hidden print:hidden">
+                  {row.through > 0 ? `${row.brokenOfThrough} of ${row.through}` : `${row.incidents} reported`}
+                </span>
               </td>
             </tr>
           ))}
