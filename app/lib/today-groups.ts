@@ -42,10 +42,11 @@ function group<Row>(rows: Row[], since: (row: Row) => string): TodayGroup<Row> {
 interface Waiting extends Record<keyof TodayGroups, { total: number }> {
   sheets: Record<"toRelease" | "toSign" | "returned", { total: number }>;
   lots: Record<keyof TodayLots, { total: number }>;
+  incidents: { total: number };
 }
 
 /** What waits, in one sentence, what waits for the reader alone first: 'One sheet waits for your review and two flows need a decision.' */
-export function headline({ sheets, lots, decisions, outOfDate, notAssessed }: Waiting): string {
+export function headline({ sheets, lots, incidents, decisions, outOfDate, notAssessed }: Waiting): string {
   const { toRelease, toSign, returned } = sheets;
   const parts = [
     part(toRelease.total, "sheet waits for your review", "sheets wait for your review"),
@@ -53,6 +54,7 @@ export function headline({ sheets, lots, decisions, outOfDate, notAssessed }: Wa
     part(returned.total, "sheet was returned to you", "sheets were returned to you"),
     part(lots.blocked.total, "lot or step is held", "lots or steps are held"),
     part(lots.toMove.total, "lot is on an old sheet", "lots are on old sheets"),
+    part(incidents.total, "incident is to be followed up", "incidents are to be followed up"),
     part(decisions.total, "flow needs a decision", "flows need a decision"),
     part(outOfDate.total, "assessment is out of date", "assessments are out of date"),
     part(notAssessed.total, "flow is not assessed yet", "flows are not assessed yet"),

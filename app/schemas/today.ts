@@ -1,5 +1,6 @@
 import type { FaceUp, Holding, Outcome } from "#app/engine/vocabulary.ts";
 import type { ShapeResult } from "./assessment-result.ts";
+import type { Severity } from "./incident.ts";
 import type { FoundGroup } from "./search.ts";
 import type { ScanRow } from "./scan-view.ts";
 import type { RevisionState } from "./sheet-revision.ts";
@@ -91,6 +92,18 @@ export interface TodayLot {
   mine: boolean;
 }
 
+/** An incident that nobody follows up yet. */
+export interface TodayIncident {
+  id: string;
+  title: string;
+  severity: Severity;
+  words: string;
+  lot: string;
+  program: string;
+  /** ISO date-time at which it happened */
+  at: string;
+}
+
 export interface TodayLots {
   /** open holds of lots and stops of steps, longest first */
   blocked: TodayGroup<TodayLot>;
@@ -110,6 +123,7 @@ export interface TodayView {
   notAssessed: TodayGroup<TodayFlow>;
   sheets: TodaySheets;
   lots: TodayLots;
+  incidents: TodayGroup<TodayIncident>;
   scans: ScanRow[];
   programs: TodayProgram[];
   /** for who may load and remove it: whether the demo is on the site, with its programs that this person belongs to */

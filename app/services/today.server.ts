@@ -9,6 +9,7 @@ import { inScope, type ActorScope } from "#app/server/scope.server.ts";
 import { outOfDateAmong } from "./assessments/out-of-date.server.ts";
 import { demoIsHere, demoPrograms } from "./demo/demo-view.server.ts";
 import { lotsOfToday } from "./floor/today-lots.server.ts";
+import { incidentsOfToday } from "./incidents/today-incidents.server.ts";
 import { keptGroups } from "./kept/kept-rows.server.ts";
 import { latestScans } from "./scans.server.ts";
 import { sheetsOfToday } from "./sheets/today-sheets.server.ts";
@@ -35,6 +36,7 @@ export async function todayView(scope: ActorScope): Promise<TodayView> {
       demo: mayOnSite(actor, "load and remove the demo") ? await demoOf(em) : null,
       kept: await keptGroups(em, scope),
       sheets: await sheetsOfToday(em, scope),
+      incidents: works.length === 0 ? nothing : await incidentsOfToday(em, scope),
       lots: works.length === 0 ? { blocked: nothing, toMove: nothing } : await lotsOfToday(em, scope),
     };
     if (works.length === 0)

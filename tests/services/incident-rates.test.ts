@@ -115,6 +115,24 @@ test("a report counts at its place, with the larger of both counts; one that nob
   expect(byThickness.map(({ name }) => name)).toEqual(["60 to 120 µm", "over 300 µm"]);
 });
 
+test("incidents and sheets are found by their numbers, and an incident waits on Today until somebody follows it up", async () => {
+  const { searchEverything } = await import("#app/services/search.server.ts");
+  const foundBy = async (query: string, kind: string) =>
+    (await searchEverything(engineer, query)).groups.find((group) => group.kind === kind)?.rows.map(({ name }) => name);
+  expect(await foundBy("tern-i001", "incident")).toEqual(["TERN-I001"]);
+  expect(await foundBy("tern-h001", "sheet")).toEqual(["TERN-H001"]);
+  const { todayView } = await import("#app/services/today.server.ts");
+  expect((await todayView(engineer)).incidents).toMatchObject({
+    total: 2,
+    rows: [{ lot: "T-0500" }, { lot: "T-0600" }],
+  });
+  expect((await todayView(technician)).incidents.total).toBe(0);
+  const { followUp } = await import("#app/services/incidents/follow-up.server.ts");
+  const { rows } = (await todayView(engineer)).incidents;
+  await followUp(engineer, rows[0]?.id, { text: "Finger set anew", state: "closed" });
+  expect((await todayView(engineer)).incidents.total).toBe(1);
+});
+
 test("each reader counts their own programs alone", async () => {
   expect((await rates(engineer, "petrel")).all.incidents).toBe(0);
   expect((await rates(engineer, "tern")).all.incidents).toBe(2);

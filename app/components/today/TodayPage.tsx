@@ -8,6 +8,7 @@ import { LoadDemo } from "#app/components/demo/LoadDemo.tsx";
 import { FirstSteps } from "./FirstSteps.tsx";
 import { TodayAssessedRow } from "./TodayAssessedRow.tsx";
 import { DemoTold, TodayDemo } from "./TodayDemo.tsx";
+import { TodayIncidents } from "./TodayIncidents.tsx";
 import { LotsThatWait } from "./TodayLots.tsx";
 import { TodayHead } from "./TodayHead.tsx";
 import { TodayPrograms } from "./TodayPrograms.tsx";
@@ -43,6 +44,7 @@ export function TodayPage({ view, told }: Props) {
               {demo?.here === false && <LoadDemo />}
             </div>
           )}
+          <TodayIncidents incidents={view.incidents} />
           <SheetsThatWait sheets={view.sheets} now={view.now} />
           {decisions.total > 0 && (
             <TodaySection title="Needs a decision" remark="oldest first" more={moreOf(decisions)}>

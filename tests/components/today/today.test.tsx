@@ -28,6 +28,7 @@ const EMPTY: TodayView = {
   scans: [],
   sheets: SHEETS,
   lots: { blocked: none, toMove: none },
+  incidents: none,
   programs: [PROGRAM],
   kept: [],
   demo: null,

@@ -72,6 +72,7 @@ describe("the sentence at the top", () => {
       headline({
         sheets: { toRelease: { total: 0 }, toSign: { total: 0 }, returned: { total: 0 } },
         lots: NO_LOTS,
+        incidents: { total: 0 },
         decisions: { total: decisions },
         outOfDate: { total: outOfDate },
         notAssessed: { total: notAssessed },
@@ -83,8 +84,9 @@ describe("the sentence at the top", () => {
     const sheets = { toRelease: { total: 2 }, toSign: { total: 1 }, returned: { total: 1 } };
     const none = { total: 0 };
     const lots = { blocked: { total: 1 }, toMove: { total: 2 } };
-    expect(headline({ sheets, lots, decisions: { total: 1 }, outOfDate: none, notAssessed: none })).toBe(
-      "Two sheets wait for your review, one deviation waits for your signature, one sheet was returned to you, one lot or step is held, two lots are on old sheets and one flow needs a decision.",
+    const incidents = { total: 2 };
+    expect(headline({ sheets, lots, incidents, decisions: { total: 1 }, outOfDate: none, notAssessed: none })).toBe(
+      "Two sheets wait for your review, one deviation waits for your signature, one sheet was returned to you, one lot or step is held, two lots are on old sheets, two incidents are to be followed up and one flow needs a decision.",
     );
   });
 
