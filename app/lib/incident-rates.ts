@@ -57,13 +57,13 @@ export function incidentRates(passed: readonly StepPassed[]): IncidentRates {
   const bands = THICKNESS_BANDS.filter((band) => passed.some(({ silicon }) => bandOf(silicon) === band));
   const inOrder = (names: readonly string[], of: (each: StepPassed) => string) =>
     names.map((name) =>
-      rowOf(
+      rateRow(
         name,
         passed.filter((each) => of(each) === name),
       ),
     );
   return {
-    all: rowOf("All", passed),
+    all: rateRow("All", passed),
     byStep: grouped(passed, ({ stepKind }) => stepKind),
     bySupport: inOrder(supports, ({ support }) => support),
     byThickness: inOrder(bands, ({ silicon }) => bandOf(silicon)),
@@ -74,7 +74,7 @@ export function incidentRates(passed: readonly StepPassed[]): IncidentRates {
         band,
         cells: supports.map((support) => {
           const here = passed.filter((each) => each.support === support && bandOf(each.silicon) === band);
-          return here.length > 0 ? rowOf(`${support}, ${band}`, here) : null;
+          return here.length > 0 ? rateRow(`${support}, ${band}`, here) : null;
         }),
       })),
     },
@@ -83,7 +83,7 @@ export function incidentRates(passed: readonly StepPassed[]): IncidentRates {
 
 function grouped(passed: readonly StepPassed[], of: (each: StepPassed) => string): RateRow[] {
   return [...groupBy(passed, of)]
-    .map(([name, steps]) => rowOf(name, steps))
+    .map(([name, steps]) => rateRow(name, steps))
     .toSorted((a, b) => b.broken - a.broken || b.incidents - a.incidents || a.name.localeCompare(b.name));
 }
 
@@ -100,7 +100,8 @@ function groupBy<Item>(items: readonly Item[], of: (item: Item) => string): Map<
 const sum = (steps: readonly StepPassed[], of: (step: StepPassed) => number) =>
   steps.reduce((total, step) => total + of(step), 0);
 
-function rowOf(name: string, steps: readonly StepPassed[]): RateRow {
+/** A row of counts with its rate. */
+export function rateRow(name: string, steps: readonly StepPassed[]): RateRow {
   const counted = steps.filter(({ through }) => through !== null && through > 0);
   // A wafer that breaks twice at a step, or a count that is too low, must not make more than all.
   const brokenOfThrough = sum(counted, ({ broken, through }) => Math.min(broken, through ?? 0));

@@ -109,7 +109,7 @@ test("wafers that went through without an incident count, and what the floor cou
 test("a report counts at its place, with the larger of both counts; one that nobody counted is in no rate", async () => {
   await report({ through: "3" });
   expect((await rates()).all).toMatchObject({ incidents: 1, affected: 2, broken: 1, through: 27, brokenOfThrough: 1 });
-  await report({ lot: "T-0600", step: 14, through: "" });
+  await report({ lot: "T-0600", step: 14, through: "", occurredAt: "2026-11-21 08:00" });
   const { all, byThickness } = await rates();
   expect(all).toMatchObject({ incidents: 2, broken: 2, through: 27, brokenOfThrough: 1, uncounted: 1 });
   expect(byThickness.map(({ name }) => name)).toEqual(["60 to 120 µm", "over 300 µm"]);

@@ -4,10 +4,11 @@ import { EmptyState } from "#app/components/ui/EmptyState.tsx";
 import { ratesSentence } from "#app/lib/rate-words.ts";
 import type { IncidentRatesView } from "#app/schemas/incident-rates.ts";
 import { BreakageMap } from "./BreakageMap.tsx";
+import { LimitTable } from "./LimitTable.tsx";
 import { RateTable } from "./RateTable.tsx";
 
 /** How often wafers break, by what steps have in common, each rate with its interval. */
-export function IncidentRates({ rates, program, programs }: IncidentRatesView) {
+export function IncidentRates({ rates, limits, program, programs }: IncidentRatesView) {
   const { all, byStep, bySupport, byThickness, byFilms, map } = rates;
   return (
     <>
@@ -59,6 +60,7 @@ export function IncidentRates({ rates, program, programs }: IncidentRatesView) {
             or the floor has counted, the larger of both; else all of the lot, where the floor has done the step.
           </p>
           <BreakageMap map={map} all={all} />
+          <LimitTable limits={limits} rates={rates} />
           <RateTable caption="By support" head="Held by" rows={bySupport} all={all} />
           <RateTable caption="By silicon thickness" head="Silicon" rows={byThickness} all={all} />
           <RateTable caption="By step" head="Step" rows={byStep} all={all} />

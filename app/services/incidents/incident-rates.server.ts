@@ -1,11 +1,15 @@
 import type { EntityManager } from "@mikro-orm/postgresql";
 import { Assessment } from "#app/db/entities/assessment.ts";
+import { LIMIT_DEFINITIONS } from "#app/engine/rules/limits.ts";
 import type { SupportClass } from "#app/engine/vocabulary.ts";
 import { incidentRates, type StepPassed } from "#app/lib/incident-rates.ts";
+import { limitEvidence } from "#app/lib/limit-evidence.ts";
+import { lengthWords } from "#app/lib/stack-words.ts";
 import { stepPrediction } from "#app/lib/step-prediction.ts";
 import { programsWhere } from "#app/policies/permissions.ts";
 import type { IncidentRatesView } from "#app/schemas/incident-rates.ts";
 import { inScope, type ActorScope } from "#app/server/scope.server.ts";
+import { readLimits } from "../limits.server.ts";
 import { requireInSomeProgram } from "../permission.server.ts";
 import { programFilter } from "../program-filter.server.ts";
 
@@ -16,8 +20,18 @@ import { programFilter } from "../program-filter.server.ts";
 export async function incidentRatesView(scope: ActorScope, program: string): Promise<IncidentRatesView> {
   requireInSomeProgram(scope, "see the work");
   const { $in: programs } = programFilter(scope.actor, "see the work", program);
+  const { passed, limits } = await inScope(scope, async (em) => ({
+    passed: programs.length > 0 ? await stepsPassed(em, programs) : [],
+    limits: await readLimits(em),
+  }));
+  const rates = incidentRates(passed);
   return {
-    rates: incidentRates(programs.length > 0 ? await inScope(scope, (em) => stepsPassed(em, programs)) : []),
+    rates,
+    limits: limitEvidence(passed, limits, rates.all).map((evidence) => ({
+      ...evidence,
+      title: LIMIT_DEFINITIONS[evidence.key].title,
+      value: lengthWords(evidence.limit),
+    })),
     program,
     programs: programsWhere(scope.actor, "see the work").map(({ programSlug, programName }) => ({
       value: programSlug,
@@ -25,6 +39,9 @@ export async function incidentRatesView(scope: ActorScope, program: string): Pro
     })),
   };
 }
+
+/** With the diameter of the wafer, m. */
+type SizedStep = StepPassed & { diameter: number };
 
 /** A lot at a step: what both counts have in common. */
 interface Place {
@@ -35,6 +52,7 @@ interface Place {
 }
 
 interface Reported extends Place {
+  diameter: number;
   step_kind: string;
   planned: SupportClass;
   silicon: number;
@@ -56,12 +74,12 @@ const keyOf = ({ assessment_id, leg, step, lot_id }: Place) => `${assessment_id}
  * Every lot at every step that the floor has entered as done, or at which something was reported. How many wafers went through is what the
  * report or the floor has counted, the larger of both; else the wafers of the lot, where the floor has done the step.
  */
-async function stepsPassed(em: EntityManager, programs: string[]): Promise<StepPassed[]> {
+async function stepsPassed(em: EntityManager, programs: string[]): Promise<SizedStep[]> {
   const reported = await em.execute<Reported[]>(
-    `select assessment_id, leg, step, lot_id, min(step_kind) as step_kind, min(planned) as planned, min(silicon) as silicon,
+    `select assessment_id, leg, step, lot_id, min((a.result->'wafer'->>'diameter')::float8) as diameter, min(step_kind) as step_kind, min(planned) as planned, min(silicon) as silicon,
             min(films) as films, count(*)::int as incidents, sum(affected)::int as affected, sum(broken)::int as broken,
             max(through) as through
-       from incident where program_id in (?) group by assessment_id, leg, step, lot_id`,
+       from incident x join assessment a on a.id = x.assessment_id where x.program_id in (?) group by assessment_id, leg, step, lot_id`,
     [programs],
   );
   const done = await em.execute<Done[]>(
@@ -88,7 +106,18 @@ function throughOf(done: Done | undefined, stated: number | null): number | null
   return done && done.wafers > 0 ? done.wafers : null;
 }
 
-const ofReport = ({ step_kind, planned, silicon, films, incidents, affected, broken, through }: Reported) => ({
+const ofReport = ({
+  diameter,
+  step_kind,
+  planned,
+  silicon,
+  films,
+  incidents,
+  affected,
+  broken,
+  through,
+}: Reported) => ({
+  diameter,
   stepKind: step_kind,
   support: planned,
   silicon,
@@ -100,8 +129,8 @@ const ofReport = ({ step_kind, planned, silicon, films, incidents, affected, bro
 });
 
 /** Steps that were done and of which nothing was reported, with what their assessment says of them. */
-async function quietSteps(em: EntityManager, done: readonly Done[]): Promise<StepPassed[]> {
-  const passed: StepPassed[] = [];
+async function quietSteps(em: EntityManager, done: readonly Done[]): Promise<SizedStep[]> {
+  const passed: SizedStep[] = [];
   // One assessment at a time: each is large, and most lots share a few.
   for (const id of new Set(done.map(({ assessment_id }) => assessment_id))) {
     const assessment = await em.findOneOrFail(Assessment, { id }, { populate: ["input"] });
@@ -110,7 +139,8 @@ async function quietSteps(em: EntityManager, done: readonly Done[]): Promise<Ste
       if (!said) continue;
       const { stepKind, planned: support, silicon, films } = said;
       const through = throughOf(each, null);
-      passed.push({ stepKind, support, silicon, films, through, incidents: 0, affected: 0, broken: 0 });
+      const { diameter } = assessment.result.wafer;
+      passed.push({ diameter, stepKind, support, silicon, films, through, incidents: 0, affected: 0, broken: 0 });
     }
     em.clear();
   }

@@ -1,5 +1,7 @@
 import { describe, expect, it } from "vitest";
+import { defaultLimits } from "#app/engine/rules/limits.ts";
 import { bandOf, incidentRates, type StepPassed } from "#app/lib/incident-rates.ts";
+import { limitEvidence } from "#app/lib/limit-evidence.ts";
 import { against, percentWords, ratesSentence, rateWords } from "#app/lib/rate-words.ts";
 
 const step = (changed: Partial<StepPassed> = {}): StepPassed => ({
@@ -87,5 +89,42 @@ describe("rates of breakage", () => {
     [0.000253, "0.025\u00A0%"],
   ])("%d as a percentage", (share, words) => {
     expect(percentWords(share)).toBe(words);
+  });
+});
+
+describe("limits against what happened", () => {
+  const limits = defaultLimits();
+  const bare = (silicon: number, changed: Partial<StepPassed> = {}) => ({
+    ...step({ support: "bare", silicon, ...changed }),
+    diameter: 0.2,
+  });
+  const evidence = (passed: ReturnType<typeof bare>[]) => limitEvidence(passed, limits, incidentRates(passed).all);
+
+  it("speaks for a limit below which more break, the limit itself on its safe side", () => {
+    const found = evidence([
+      bare(limits.bareFrom200.value, { through: 1000 }),
+      bare(200e-6, { through: 50, broken: 5 }),
+    ]);
+    expect(found).toMatchObject([
+      { key: "bareFrom200", speaks: "for it", from: { through: 1000 }, below: { through: 50, brokenOfThrough: 5 } },
+    ]);
+  });
+
+  it("speaks against one below which fewer break, and calls one too low from which on many do", () => {
+    const many = { through: 200, incidents: 4, affected: 4, broken: 4 };
+    const against = evidence([bare(725e-6, many), bare(200e-6, { through: 1000 })]);
+    expect(against.map(({ speaks }) => speaks)).toEqual(["against it"]);
+    const elsewhere = { ...step({ through: 5000 }), diameter: 0.2 };
+    expect(evidence([bare(725e-6, many), elsewhere]).map(({ speaks }) => speaks)).toEqual(["too low"]);
+  });
+
+  it("says nothing from few, and leaves out limits of which nothing is known", () => {
+    expect(evidence([bare(725e-6), bare(200e-6, { broken: 1 })]).map(({ speaks }) => speaks)).toEqual([
+      "too few to say",
+    ]);
+    expect(evidence([bare(725e-6)]).map(({ key, speaks }) => `${key} ${speaks}`)).toEqual([
+      "bareFrom200 too few to say",
+    ]);
+    expect(limitEvidence([{ ...step(), diameter: 0.3 }], limits, { rate: null })).toEqual([]);
   });
 });
