@@ -22,8 +22,10 @@ function contentSecurityPolicy(nonce: string): string {
   ].join("; ");
 }
 
+const FLOOR = /^\/floor(?:\/|$)/;
+
 /** Headers that every answer carries. */
-export const securityHeaders: MiddlewareFunction<Response> = async ({ context }, next) => {
+export const securityHeaders: MiddlewareFunction<Response> = async ({ context, request }, next) => {
   const nonce = randomBytes(16).toString("base64");
   context.set(nonceContext, nonce);
   const response = await next();
@@ -32,7 +34,9 @@ export const securityHeaders: MiddlewareFunction<Response> = async ({ context },
   if (!headers.has("Content-Security-Policy")) headers.set("Content-Security-Policy", contentSecurityPolicy(nonce));
   headers.set("Referrer-Policy", "same-origin");
   headers.set("Cross-Origin-Opener-Policy", "same-origin");
-  headers.set("Permissions-Policy", "camera=(), geolocation=(), microphone=()");
+  // Codes are read on the floor, whose pages are documents of their own.
+  const camera = FLOOR.test(new URL(request.url).pathname) ? "self" : "";
+  headers.set("Permissions-Policy", `camera=(${camera}), geolocation=(), microphone=()`);
   if (!headers.has("Cache-Control")) headers.set("Cache-Control", "private, no-store");
   return response;
 };

@@ -1,4 +1,5 @@
 import type { Browser, Page } from "@playwright/test";
+import { toDataURL } from "qrcode";
 import { assess, ownFlow, press } from "./flow-pages.ts";
 import { expect, expectNoAxeFindings, signIn, test } from "./support.ts";
 
@@ -137,6 +138,54 @@ test("a screen of the floor fits a phone, and a dark one", async ({ page, browse
     }
     await expectNoAxeFindings(phone);
   }
+});
+
+test("a code is read with the camera, which only the floor may use; a camera that is refused says so", async ({
+  page,
+}) => {
+  await signIn(page, "technician");
+  const name = `C-${Date.now().toString(36)}`;
+  await page.goto("/lots/new");
+  await page.getByLabel("Program").selectOption({ label: "Tern" });
+  await page.getByLabel("Lot", { exact: true }).fill(name);
+  await press(page, "Make them");
+  await expect(page.getByRole("heading", { level: 1, name: `Lot ${name}` })).toBeVisible();
+
+  // A camera that sees the label, and later one that nobody allows.
+  await page.addInitScript(
+    ([label]) => {
+      navigator.mediaDevices.getUserMedia = async () => {
+        if (sessionStorage.getItem("refused") !== null) throw new DOMException("no", "NotAllowedError");
+        const image = new Image();
+        image.src = label ?? "";
+        await image.decode();
+        const canvas = Object.assign(document.createElement("canvas"), { width: 640, height: 480 });
+        const drawing = canvas.getContext("2d");
+        const draw = () => {
+          drawing?.fillRect(0, 0, 640, 480);
+          drawing?.drawImage(image, 120, 40);
+        };
+        draw();
+        setInterval(draw, 50);
+        return canvas.captureStream(20);
+      };
+    },
+    [await toDataURL(name, { width: 400, margin: 4 })],
+  );
+  const floor = page.getByRole("link", { name: "Floor", exact: true });
+  const [answer] = await Promise.all([page.waitForResponse((each) => each.url().endsWith("/floor")), floor.click()]);
+  expect(answer.headers()["permissions-policy"]).toContain("camera=(self)");
+  await expect(page.getByRole("heading", { level: 1, name: "Find a lot" })).toBeVisible();
+  await page.getByRole("button", { name: "Read a code with the camera" }).click();
+  await expect(page.getByRole("heading", { level: 1, name: `Lot ${name}` })).toBeVisible();
+
+  await page.evaluate(() => sessionStorage.setItem("refused", "yes"));
+  await page.goto("/floor");
+  await page.getByRole("button", { name: "Read a code with the camera" }).click();
+  await expect(page.getByRole("alert")).toContainText("The camera is not allowed here.");
+  await expectNoAxeFindings(page);
+  const desk = await page.request.get("/lots");
+  expect(desk.headers()["permissions-policy"]).toContain("camera=()");
 });
 
 test.describe("through a lost connection", () => {

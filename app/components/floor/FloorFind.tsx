@@ -1,6 +1,7 @@
 import { useId } from "react";
 import { Form } from "react-router";
 import type { FoundLot, FoundLots } from "#app/schemas/floor-view.ts";
+import { CameraFinder } from "./CameraFinder.tsx";
 import { FloorHead } from "./FloorHead.tsx";
 
 /**
@@ -37,6 +38,7 @@ export function FloorFind({ found, person }: { found: FoundLots; person: string 
             Find
           </button>
         </Form>
+        <CameraFinder />
         {query !== "" &&
           (rows.length === 0 ? (
             <p role="status" className="mt-6 text-lead">

@@ -65,6 +65,8 @@ export function TopBar({ person, places, programs }: Props) {
             <li key={path}>
               <Link
                 to={path}
+                // A document of its own, which alone may use the camera.
+                reloadDocument={path === "/floor"}
                 aria-current={liesIn(path, pathname) ? "page" : undefined}
                 className="block py-2 whitespace-nowrap text-quiet no-underline aria-[current=page]:border-b-4 aria-[current=page]:border-ink aria-[current=page]:pb-1 aria-[current=page]:font-semibold aria-[current=page]:text-ink aria-[current=page]:[scroll-initial-target:nearest]"
               >
