@@ -46,17 +46,26 @@ export function pageOfPoints(points: readonly PredictionPoint[], params: ListPar
   return { rows: points.slice(from, from + PAGE_SIZE), total: points.length, params };
 }
 
-/** What the model is off by, over all points and for each step or film; those that it is off at first. */
+/** What the model is off by, over all points, for each step or film, and for each flow; those that it is off at first. */
 export function compared(
   points: readonly PredictionPoint[],
-): { all: PredictionGroup; groups: PredictionGroup[] } | null {
+): { all: PredictionGroup; groups: PredictionGroup[]; flows: PredictionGroup[] } | null {
   if (points.length === 0) return null;
-  const { all, steps } = predictedAgainstMeasured(points.map(({ group, ...point }) => ({ step: group, ...point })));
-  const groups = steps
+  const by = (of: (point: PredictionPoint) => string, some = points) =>
+    predictedAgainstMeasured(some.map((point) => ({ ...point, step: of(point) })));
+  const { all, steps } = by(({ group }) => group);
+  const ofFlows = points.filter(({ flow }) => flow !== undefined);
+  return {
+    all: withOff(all),
+    groups: offFirst(steps),
+    flows: ofFlows.length > 0 ? offFirst(by(({ flow = "" }) => flow, ofFlows).steps) : [],
+  };
+}
+
+const offFirst = (groups: Parity[]): PredictionGroup[] =>
+  groups
     .map(withOff)
     .toSorted((a, b) => Number(b.isOff) - Number(a.isOff) || b.agreement - a.agreement || a.step.localeCompare(b.step));
-  return { all: withOff(all), groups };
-}
 
 const withOff = (parity: Parity): PredictionGroup => ({ ...parity, isOff: parity.off.length > 0 });
 

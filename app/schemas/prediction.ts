@@ -11,6 +11,8 @@ export interface PredictionPoint {
   id: string;
   /** step of a flow, or film: what points are grouped by */
   group: string;
+  /** name of the flow; left out where it is not of one */
+  flow?: string;
   /** lot and wafer, or wafer */
   name: string;
   program: string;
@@ -43,6 +45,8 @@ export interface Predictions {
   /** null without points */
   all: PredictionGroup | null;
   groups: PredictionGroup[];
+  /** the same for each flow, whatever the step; empty where points are of no flow */
+  flows: PredictionGroup[];
   working: ShownWorking | null;
   /** how many there are of each kind, with the same filters */
   counts: Record<Predicted, number>;

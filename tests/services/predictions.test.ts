@@ -73,12 +73,13 @@ describe("bows after a step", () => {
   });
 
   test("stand in the comparison with bias and its uncertainty, step by step", async () => {
-    const { of, all, groups, points, working } = await compare("of=bow");
+    const { of, all, groups, flows, points, working } = await compare("of=bow");
     expect(of).toBe("bow");
     expect(points).toHaveLength(3);
     expect(all?.bias).toBeCloseTo(um(42), 9);
     expect(all?.biasUncertainty).toBeGreaterThan(0);
     expect(groups).toMatchObject([{ step: expect.stringMatching(/^Tern .*: step \d+, /) as string, count: 3 }]);
+    expect(flows).toMatchObject([{ step: expect.stringMatching(/^Tern [^:]*$/) as string, count: 3 }]);
     expect(working?.equation).toBe("predicted-slope");
   });
 

@@ -4,12 +4,13 @@ import { OwnFigure, OwnHead } from "#app/components/units/OwnFigure.tsx";
 
 interface Props {
   of: Predicted;
+  /** what each of them is */
+  what: "Step" | "Film" | "Flow";
   groups: readonly PredictionGroup[];
 }
 
-/** Each step or film with what the model is off by there; those that it is off at come first. */
-export function ParityGroups({ of, groups }: Props) {
-  const what = of === "bow" ? "Step" : "Film";
+/** Each step, film or flow with what the model is off by there; those that it is off at come first. */
+export function ParityGroups({ of, what, groups }: Props) {
   const unit = of === "bow" ? "µm" : "MPa";
   return (
     <div className="overflow-x-auto" tabIndex={0} role="region" aria-label={`Each ${what.toLowerCase()}`}>

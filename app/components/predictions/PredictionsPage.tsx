@@ -69,7 +69,7 @@ function Kinds({ predictions: { of, counts } }: { predictions: Predictions }) {
 }
 
 function Compared({ predictions, all }: { predictions: Predictions; all: NonNullable<Predictions["all"]> }) {
-  const { of, points, groups, page, working } = predictions;
+  const { of, points, groups, flows, page, working } = predictions;
   const [first, ...more] = predictionSentences(of, all, groups);
   const off = new Set(groups.filter(({ isOff }) => isOff).map(({ step }) => step));
   return (
@@ -91,7 +91,13 @@ function Compared({ predictions, all }: { predictions: Predictions; all: NonNull
             <h2 id="where" className="mb-1 font-semibold">
               {of === "bow" ? "Step by step" : "Film by film"}
             </h2>
-            <ParityGroups of={of} groups={groups} />
+            <ParityGroups of={of} what={of === "bow" ? "Step" : "Film"} groups={groups} />
+            {flows.length > 0 && (
+              <>
+                <h2 className="mt-4 mb-1 font-semibold">Flow by flow</h2>
+                <ParityGroups of={of} what="Flow" groups={flows} />
+              </>
+            )}
             {working && (
               <details className="screen-only mt-3">
                 <summary className="link w-fit cursor-pointer">Working over all points</summary>

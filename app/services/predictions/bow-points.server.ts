@@ -38,6 +38,7 @@ async function recorded(
   return rows.map((row) => ({
     id: row.id,
     group: groupOf(names.get(row.assessment.id) ?? "", row.step, row.stepTitle),
+    flow: names.get(row.assessment.id) ?? "",
     name: [row.lot, row.wafer].filter(Boolean).join(", "),
     program: row.program.name,
     predicted: row.predicted,
@@ -98,6 +99,7 @@ function pointsOfLot({ id, of_id, flow_name, program, created_at, lot, first }: 
   return measured.map(({ slot, bow }) => ({
     id: `${id} ${slot ?? "mean"}`,
     group: groupOf(flow_name, first.number, first.title),
+    flow: flow_name,
     name: `${lot.name}, ${slot === null ? "mean" : `slot ${slot}`}`,
     program,
     predicted: shape.bow,

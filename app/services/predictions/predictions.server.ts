@@ -43,6 +43,7 @@ export async function predictionsPage(scope: ActorScope, search: URLSearchParams
       points,
       all: found?.all ?? null,
       groups: found?.groups ?? [],
+      flows: found?.flows ?? [],
       working: working && shownWorking(working),
       counts,
       filters,
@@ -50,7 +51,7 @@ export async function predictionsPage(scope: ActorScope, search: URLSearchParams
   });
 }
 
-const withStep = ({ group, ...point }: PredictionPoint) => ({ step: group, ...point });
+const withStep = ({ group, flow: _, ...point }: PredictionPoint) => ({ step: group, ...point });
 
 /** The points that the filters and the search leave, all pages of them. */
 export async function predictionPoints(

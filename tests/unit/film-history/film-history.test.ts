@@ -139,6 +139,17 @@ describe("predicted against measured", () => {
     expect(compared([])).toBeNull();
   });
 
+  it("says for each flow what its steps are off by together, and nothing of points that are of no flow", () => {
+    const of = (flow: string, points: PredictionPoint[]) => points.map((each) => ({ ...each, flow }));
+    const found = compared([...of("A", good), ...of("B", bad), ...of("B", good.slice(0, 1)), point("loose", -50, -50)]);
+    expect(found?.flows.map(({ step, count, isOff }) => [step, count, isOff])).toEqual([
+      ["B", 6, true],
+      ["A", 5, false],
+    ]);
+    expect(found?.flows[0]?.bias).toBeCloseTo(25.3e-6, 7);
+    expect(compared(good)?.flows).toEqual([]);
+  });
+
   it("does not know a prediction better by more wafers that share it", () => {
     const alone = compared(good)?.all.biasUncertainty ?? 0;
     const shared = compared(good.map((each) => ({ ...each, shared: "one assessment" })))?.all.biasUncertainty ?? 0;
