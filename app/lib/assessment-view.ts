@@ -11,7 +11,7 @@ import { withPieceMark } from "./carrier-units.ts";
 import { celsius, figureText, micrometres } from "./assessment-figure.ts";
 import { legAnswer, type LegsView } from "./assessment-leg.ts";
 import { bySeverity, figureWorkingPath, type ResultPlace } from "./assessment-finding.ts";
-import { assessmentNumber } from "./assessment-number.ts";
+import { recordNumber } from "#app/lib/record-number.ts";
 import { revisionOf } from "./assessment-revision.ts";
 import { selectedStep, stepAskedFor, type SelectedStep } from "./assessment-selected.ts";
 import { isRolled } from "./lying-as.ts";
@@ -128,7 +128,7 @@ export function titleBlock(head: AssessmentHead, documentType: string, page: str
     prepared: head.createdBy,
     checked: "not yet",
     released: "not yet",
-    number: assessmentNumber(head.program.slug, head.documentNumber),
+    number: recordNumber("assessment", head.program.slug, head.documentNumber),
     revision: revisionOf(head),
     status: "Draft",
     date: head.createdAt.slice(0, 10),

@@ -1,7 +1,7 @@
 import type { AssessmentName, ComparedAssessment, ComparisonOffer } from "#app/schemas/assessment-comparison.ts";
 import type { InputChange } from "#app/schemas/assessment-changes.ts";
 import { alignSteps } from "./align.ts";
-import { assessmentNumber } from "./assessment-number.ts";
+import { recordNumber } from "#app/lib/record-number.ts";
 import { revisionLetters } from "./assessment-revision.ts";
 import { movementSentence } from "./out-of-date-words.ts";
 import { compareResults, movementOf, sameSlots, type AnswerSummary, type ComparisonRow } from "./result-comparison.ts";
@@ -76,7 +76,7 @@ function chosenView(
     ...answer,
     id: each.id,
     name: sameFlow ? `Revision ${revisionLetters(each.number)}` : each.flow.name,
-    document: `${assessmentNumber(slug, each.documentNumber)}, ${sameFlow ? "" : `${revision(each)}, `}${each.createdAt.slice(0, 10)}`,
+    document: `${recordNumber("assessment", slug, each.documentNumber)}, ${sameFlow ? "" : `${revision(each)}, `}${each.createdAt.slice(0, 10)}`,
   });
   return {
     with: before.id === askedId ? after.id : before.id,

@@ -15,7 +15,7 @@ import type { AssessmentResult, BondResult, ShapeResult, StepResult } from "#app
 import { withPieceMark } from "./carrier-units.ts";
 import { legAnswer, type LegsView } from "./assessment-leg.ts";
 import { celsius } from "./assessment-figure.ts";
-import { assessmentNumber } from "./assessment-number.ts";
+import { recordNumber } from "#app/lib/record-number.ts";
 import { liesWord } from "./assessment-shape.ts";
 import { revisionOf } from "./assessment-revision.ts";
 import { isRolled, lyingAs } from "./lying-as.ts";
@@ -104,7 +104,7 @@ export function sheetView(head: AssessmentHead, whole: AssessmentResult, askedLe
   const groups = sheetGroups(steps);
   return {
     assessmentId: head.id,
-    number: assessmentNumber(head.program.slug, head.documentNumber),
+    number: recordNumber("assessment", head.program.slug, head.documentNumber),
     revision: revisionOf(head),
     legs,
     lot: head.lot?.name ?? null,

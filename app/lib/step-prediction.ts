@@ -12,7 +12,7 @@ export function numberedLegs(result: AssessmentResult): { leg: number; slots: nu
 }
 
 /** A step as the wafers of a leg take it; nothing where there is no such leg or step, or they are passed over. */
-function stepOf(result: AssessmentResult, leg: number, step: number): StepResult | undefined {
+export function stepOfLeg(result: AssessmentResult, leg: number, step: number): StepResult | undefined {
   return numberedLegs(result)
     .find((each) => each.leg === leg)
     ?.result.steps.find(({ number, skipped }) => number === step && !skipped);
@@ -25,7 +25,7 @@ export function stepPrediction(
   leg: number,
   step: number,
 ): StoodPrediction | null {
-  const found = stepOf(result, leg, step);
+  const found = stepOfLeg(result, leg, step);
   if (!found) return null;
   return {
     stepKind: found.kind,

@@ -1,11 +1,8 @@
 import { z } from "zod";
 import { BLOCK_CAUSE_NAMES } from "#app/lib/floor/block-causes.ts";
+import { words } from "./written.ts";
 
-const reason = z
-  .string("Say why, in a sentence.")
-  .trim()
-  .min(1, "Say why, in a sentence.")
-  .max(1000, "Keep it under 1000 characters.");
+const reason = words("Say why, in a sentence.", 1000);
 const cause = z.enum(BLOCK_CAUSE_NAMES, "Choose the cause: it says who may clear it.");
 /** made before it is sent, so that it counts once */
 const id = z.uuid("Open the page again.");
@@ -38,10 +35,6 @@ export const clearForm = z.object({
   intent: z.literal("clear"),
   block: z.uuid("Open the page again."),
   kind: z.enum(["hold", "stop"], "Open the page again."),
-  words: z
-    .string("Say what was done about it.")
-    .trim()
-    .min(1, "Say what was done about it.")
-    .max(1000, "Keep it under 1000 characters."),
+  words: words("Say what was done about it.", 1000),
 });
 export type ClearForm = z.output<typeof clearForm>;

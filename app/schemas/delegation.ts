@@ -1,9 +1,5 @@
 import { z } from "zod";
-
-const DAY = 24 * 3600e3;
-const LONGEST = 366;
-
-const date = (message: string) => z.string(message).trim().pipe(z.iso.date(message));
+import { firstDay, lastDay, words, YEAR } from "./written.ts";
 
 /** The form in which a process owner names who stands in for them; days are UTC, the last one counts to its end. */
 export const delegationSchema = z
@@ -17,20 +13,14 @@ export const delegationSchema = z
         const [program = "", person = ""] = text.split(" ");
         return { program, person };
       }),
-    from: date("Type the first day as 2026-12-31.").transform((day) => new Date(`${day}T00:00:00Z`)),
-    until: date("Type the last day as 2026-12-31.")
-      .transform((day) => new Date(`${day}T23:59:59Z`))
-      .refine((end) => end.getTime() > Date.now(), "That day is over. Type one that is still to come."),
-    reason: z
-      .string("Say why, such as a leave.")
-      .trim()
-      .min(1, "Say why, such as a leave.")
-      .max(300, "Keep it under 300 characters."),
+    from: firstDay("Type the first day as 2026-12-31."),
+    until: lastDay("Type the last day as 2026-12-31."),
+    reason: words("Say why, such as a leave.", 300),
   })
   .check(({ value: { from, until }, issues }) => {
     const add = (message: string) => issues.push({ code: "custom", message, path: ["until"], input: until });
     if (until < from) add("The last day is before the first.");
-    else if (until.getTime() - from.getTime() > LONGEST * DAY) add("Nobody stands in for longer than a year.");
+    else if (until.getTime() - from.getTime() > YEAR) add("Nobody stands in for longer than a year.");
   });
 export type DelegationValues = z.output<typeof delegationSchema>;
 

@@ -2,12 +2,11 @@ import { z } from "zod";
 import { GRAVITY, MEASURED_ON, MEASURED_SIDES } from "#app/lib/floor/measured-how.ts";
 import { optionalQuantity, quantity } from "./quantity.ts";
 import { RULES } from "./ranges.ts";
+import { words } from "./written.ts";
 
 /** What somebody on the floor can say of a lot. */
 export type FloorKind = "acknowledged" | "started" | "done" | "measured" | "observed";
 
-const words = (message: string, most: number) =>
-  z.string(message).trim().min(1, message).max(most, `Keep it under ${most} characters.`);
 const remark = z.string().trim().max(300, "Keep it under 300 characters.").default("");
 
 /** A count of wafers, up to what lots have; null where nobody counted. */

@@ -1,21 +1,13 @@
 import { z } from "zod";
+import { lastDay, words, YEAR } from "./written.ts";
 
 const STEP = "Choose a step of the flow.";
 
-/** Text that must say something. */
-const words = (message: string, most: number) =>
-  z.string(message).trim().min(1, message).max(most, `Keep it under ${most} characters.`);
-
-const YEAR = 366 * 24 * 3600 * 1000;
-
-/** The last day on which a deviation counts, to its end, UTC. */
-const lastDay = z
-  .string("Type the last day as 2026-12-31.")
-  .trim()
-  .pipe(z.iso.date("Type the last day as 2026-12-31."))
-  .transform((day) => new Date(`${day}T23:59:59Z`))
-  .refine((end) => end.getTime() > Date.now(), "That day is over. Type one that is still to come.")
-  .refine((end) => end.getTime() < Date.now() + YEAR, "A deviation lasts a year at most.");
+/** The last day on which a deviation counts. */
+const end = lastDay("Type the last day as 2026-12-31.").refine(
+  (day) => day.getTime() < Date.now() + YEAR,
+  "A deviation lasts a year at most.",
+);
 
 /** Everything that is said or done on the page of a review, told apart by `intent`. */
 export const reviewFormSchema = z.discriminatedUnion("intent", [
@@ -38,7 +30,7 @@ export const reviewFormSchema = z.discriminatedUnion("intent", [
       .min(1, "Tick the findings that it is for."),
     reason: words("Say why it is run all the same.", 1000),
     scope: words("Say which lots, wafers or tools it is for.", 300),
-    until: lastDay,
+    until: end,
   }),
   z.object({ intent: z.literal("sign"), deviation: z.uuid("Open the page again.") }),
   z.object({ intent: z.literal("return"), reason: words("Say why it goes back.", 1000) }),

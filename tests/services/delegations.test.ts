@@ -113,6 +113,9 @@ test("what the person stood in for has asked for is as little to be released as 
   expect(await refused((await releasing()).releaseRevision(await engineer(), theirs, "", ORIGIN))).toContain(
     `the work of ${owner.actor.name}`,
   );
+  const { todayView } = await import("#app/services/today.server.ts");
+  expect((await todayView(await engineer())).sheets.toRelease.total).toBe(0);
+  expect((await todayView(second)).sheets.toRelease.total).toBe(1);
   await returnRevision(second, theirs, { reason: "Asked for by another" });
   const own = await ask(await engineer());
   expect(await refused((await releasing()).releaseRevision(await engineer(), own, "", ORIGIN))).toContain(

@@ -3,9 +3,9 @@ import type { FloorSheet } from "#app/schemas/floor-view.ts";
 /** What always stands beside a sheet: what hurts people, and that it replaces nothing. */
 export function FloorCautions({ cautions }: Pick<FloorSheet, "cautions">) {
   return (
-    <section className="mt-5" aria-label="Always">
+    <section aria-label="Always">
       <h2 className="text-lead font-semibold">Always</h2>
-      <ul className="mt-1 list-disc pl-5 text-lead">
+      <ul className="mt-1 list-disc pl-5">
         {cautions.map(({ sign, text }) => (
           <li key={sign}>{text}</li>
         ))}

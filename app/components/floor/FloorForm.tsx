@@ -28,7 +28,12 @@ export function FloorForm({ action, words, next, children, ...rest }: Props) {
     form.set("id", id);
     const fields = [...form].map(([name, value]): [string, string] => [name, typeof value === "string" ? value : ""]);
     const at = new Date().toISOString();
-    const outcome = await outbox.enter({ id, person, lot, words, at, fields, refused: null });
+    // A device whose store is full or broken keeps nothing: then it goes out as a form, which says whether it was taken.
+    const outcome = await outbox.enter({ id, person, lot, words, at, fields, refused: null }).catch(() => null);
+    if (outcome === null) {
+      setBusy(false);
+      return submit(form, { method: "post", action });
+    }
     if (outcome === "stored") return window.location.assign(next);
     setBusy(false);
     // Sent once more as a form of the page, which then says beside its fields what is wrong.

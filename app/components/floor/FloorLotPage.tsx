@@ -141,7 +141,9 @@ function OnSheet({ lot, sheet, newId }: { lot: FloorLot; sheet: FloorSheet; newI
         <p className="text-lead">{emergency.text}</p>
         {emergency.call !== null && <p className="text-lead font-semibold">{emergency.call}</p>}
       </section>
-      <FloorCautions cautions={sheet.cautions} />
+      <div className="mt-5 text-lead">
+        <FloorCautions cautions={sheet.cautions} />
+      </div>
       <FloorEntries entries={sheet.entries} />
     </>
   );

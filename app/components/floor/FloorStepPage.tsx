@@ -6,6 +6,7 @@ import type { FloorStep } from "#app/lib/floor/floor-steps.ts";
 import type { FloorLot, FloorSheet } from "#app/schemas/floor-view.ts";
 import { FloorActions } from "./FloorActions.tsx";
 import { FloorBlocks } from "./FloorBlocks.tsx";
+import { FloorCautions } from "./FloorCautions.tsx";
 import { FloorClocks } from "./FloorClocks.tsx";
 import { FloorDeedForm } from "./FloorDeedForm.tsx";
 import { FloorOnDevice } from "./FloorOnDevice.tsx";
@@ -75,17 +76,12 @@ function Notes({ sheet, step }: { sheet: FloorSheet; step: FloorStep }) {
           ))}
         </ul>
       </section>
-      <section>
-        <h2 className="text-lead font-semibold">Always</h2>
-        <ul className="list-disc pl-5">
-          {sheet.cautions.map(({ sign, text }) => (
-            <li key={sign}>{text}</li>
-          ))}
-        </ul>
+      <div>
+        <FloorCautions cautions={sheet.cautions} />
         <p className="mt-2">
           <b>{sheet.emergency.heading}</b> {sheet.emergency.text} {sheet.emergency.call}
         </p>
-      </section>
+      </div>
     </div>
   );
 }

@@ -28,9 +28,12 @@ export function useFloorOutbox(person: string, lot: string): FloorOutbox {
     setQueued(own.filter(({ id }) => !sending.current.has(id)));
   }, [person, lot]);
 
-  useEffect(() => {
-    let stopped = false;
-    const sendAll = async () => {
+  const busy = useRef(false);
+  /** Sends what waits, oldest first, and stops at what has to wait on: an end of a step is nothing before its beginning. */
+  const sendAll = useCallback(async () => {
+    if (busy.current) return;
+    busy.current = true;
+    try {
       for (const entry of await queuedOf(person)) {
         if (entry.refused !== null || sending.current.has(entry.id)) continue;
         const delivered = await deliver(entry);
@@ -38,26 +41,36 @@ export function useFloorOutbox(person: string, lot: string): FloorOutbox {
         if (delivered.outcome === "refused") await putQueued({ ...entry, refused: delivered.sentence });
         else {
           await dropQueued(entry.id);
-          if (!stopped && entry.lot === lot) setSent((count) => count + 1);
+          if (entry.lot === lot) setSent((count) => count + 1);
         }
       }
-      if (!stopped) await look();
-    };
+    } finally {
+      busy.current = false;
+    }
+    await look();
+  }, [person, lot, look]);
+
+  useEffect(() => {
     const trying = () => void sendAll().catch(() => undefined);
     trying();
     const timer = setInterval(trying, AGAIN);
     window.addEventListener("online", trying);
     return () => {
-      stopped = true;
       clearInterval(timer);
       window.removeEventListener("online", trying);
     };
-  }, [person, lot, look]);
+  }, [sendAll]);
 
   return {
     queued,
     sent,
     enter: async (entry) => {
+      if ((await queuedOf(person)).some(({ refused }) => refused === null)) {
+        await putQueued(entry);
+        await look();
+        void sendAll().catch(() => undefined);
+        return "waits";
+      }
       sending.current.add(entry.id);
       try {
         await putQueued(entry);
@@ -81,6 +94,7 @@ export function useFloorOutbox(person: string, lot: string): FloorOutbox {
       await putQueued({ ...entry, id, fields, words: `observation: ${entry.words}`, refused: null });
       await dropQueued(entry.id);
       await look();
+      void sendAll().catch(() => undefined);
     },
   };
 }

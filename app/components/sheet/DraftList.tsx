@@ -7,7 +7,7 @@ import { EmptyState } from "#app/components/ui/EmptyState.tsx";
 import { ListHead } from "#app/components/ui/ListHead.tsx";
 import type { Option } from "#app/components/ui/SelectField.tsx";
 import { OUTCOMES } from "#app/engine/vocabulary.ts";
-import { assessmentNumber } from "#app/lib/assessment-number.ts";
+import { recordNumber } from "#app/lib/record-number.ts";
 import { revisionLetters } from "#app/lib/assessment-revision.ts";
 import type { ListPage } from "#app/lib/list-params.ts";
 import type { AssessmentRow } from "#app/schemas/assessment-row.ts";
@@ -17,7 +17,7 @@ const columns: Column<AssessmentRow>[] = [
     key: "number",
     head: "Number",
     wide: true,
-    cell: ({ programSlug, documentNumber }) => assessmentNumber(programSlug, documentNumber),
+    cell: ({ programSlug, documentNumber }) => recordNumber("assessment", programSlug, documentNumber),
   },
   { key: "revision", head: "Revision", wide: true, cell: ({ number }) => revisionLetters(number) },
   {

@@ -18,14 +18,18 @@ export async function deliver({ lot, fields, at }: QueuedEntry): Promise<Deliver
     return { outcome: "waits", why: NO_WAY };
   }
   if (answer.redirected || answer.status === 401) return { outcome: "waits", why: "you are signed out: sign in again" };
-  if (answer.status >= 500) return { outcome: "waits", why: NO_WAY };
   const said: unknown = await answer.json().catch(() => null);
-  if (answer.ok) return { outcome: "stored" };
-  return { outcome: "refused", sentence: sentenceOf(said) };
+  return read(said) ?? { outcome: "waits", why: NO_WAY };
 }
 
-function sentenceOf(said: unknown): string {
-  if (typeof said === "object" && said !== null && "sentence" in said && typeof said.sentence === "string")
-    return said.sentence;
-  return "A field of it could not be read. Enter it again.";
+/** What the server says became of it; null for an answer of something in between, such as the page of a network that wants a sign-in. */
+function read(said: unknown): Delivered | null {
+  if (typeof said !== "object" || said === null) return null;
+  if ("outcome" in said && said.outcome === "stored") return { outcome: "stored" };
+  if (!("sentence" in said)) return null;
+  const { sentence } = said;
+  return {
+    outcome: "refused",
+    sentence: typeof sentence === "string" ? sentence : "A field of it could not be read. Enter it again.",
+  };
 }

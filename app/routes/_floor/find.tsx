@@ -1,21 +1,19 @@
 import { redirect } from "react-router";
 import { FloorFind } from "#app/components/floor/FloorFind.tsx";
-import { statusPath } from "#app/lib/status-path.ts";
+import { statusPathIn } from "#app/lib/status-path.ts";
 import { scopeOf } from "#app/server/contexts.server.ts";
 import { findLots } from "#app/services/floor/find-lot.server.ts";
 import type { Route } from "./+types/find";
-
-/** The address of a paper's status, as the code on it holds it. */
-const SHEET = /^https?:\/\/[^/\s]+\/s\/([\w-]{22})$/;
 
 export const meta: Route.MetaFunction = () => [{ title: "Find a lot · Floor · Planeward" }];
 
 export async function loader({ context, url }: Route.LoaderArgs) {
   const scope = scopeOf(context);
+  const typed = url.searchParams.get("lot") ?? "";
   // The code on a sheet leads to how that sheet stands.
-  const sheet = SHEET.exec(url.searchParams.get("lot") ?? "")?.[1];
-  if (sheet !== undefined) throw redirect(statusPath(sheet));
-  const found = await findLots(scope, url.searchParams.get("lot") ?? "");
+  const sheet = statusPathIn(typed);
+  if (sheet !== null) throw redirect(sheet);
+  const found = await findLots(scope, typed);
   if (found.exact !== null) throw redirect(`/floor/lots/${found.exact}`);
   return { found, person: scope.actor.name };
 }

@@ -1,7 +1,7 @@
 import { randomUUID } from "node:crypto";
 import type { EntityManager } from "@mikro-orm/postgresql";
 import { ENGINE_VERSION } from "#app/engine/version.ts";
-import { assessmentNumber } from "#app/lib/assessment-number.ts";
+import { recordNumber } from "#app/lib/record-number.ts";
 import { inputChanges } from "#app/lib/input-changes.ts";
 import type { AssessmentInput, InputChange } from "#app/schemas/assessment-changes.ts";
 import { inScope, type ActorScope, type Scope } from "#app/server/scope.server.ts";
@@ -109,7 +109,7 @@ async function describe(em: EntityManager, scope: ActorScope, row: NewestRow): P
     id: row.id,
     program: row.program,
     flow: flow.name,
-    assessment: assessmentNumber(row.slug, row.document_number),
+    assessment: recordNumber("assessment", row.slug, row.document_number),
     changes: lines.slice(0, NAMED),
     more: Math.max(0, lines.length - NAMED),
     preparedBy: row.created_by_id,

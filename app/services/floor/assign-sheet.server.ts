@@ -3,7 +3,7 @@ import type { EntityManager } from "@mikro-orm/postgresql";
 import { LotSheet } from "#app/db/entities/lot-sheet.ts";
 import { SheetRevision } from "#app/db/entities/sheet-revision.ts";
 import { revisionLetters } from "#app/lib/assessment-revision.ts";
-import { sheetNumber } from "#app/lib/sheet-number.ts";
+import { recordNumber } from "#app/lib/record-number.ts";
 import type { AssignForm } from "#app/schemas/lot-sheet-form.ts";
 import { inScope, type ActorScope } from "#app/server/scope.server.ts";
 import { lockedRevision } from "../sheets/revision.server.ts";
@@ -71,6 +71,6 @@ export async function sheetChoices(em: EntityManager, program: { id: string; slu
   );
   return revisions.map(({ id, sheet, number, title }) => ({
     id,
-    name: `${sheetNumber(program.slug, sheet.number)} ${revisionLetters(number ?? 1)}, ${title}`,
+    name: `${recordNumber("sheet", program.slug, sheet.number)} ${revisionLetters(number ?? 1)}, ${title}`,
   }));
 }

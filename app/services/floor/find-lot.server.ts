@@ -1,4 +1,5 @@
 import type { EntityManager } from "@mikro-orm/postgresql";
+import { recordNumberSql } from "#app/lib/record-number.ts";
 import { programsWhere } from "#app/policies/permissions.ts";
 import type { FoundLot, FoundLots } from "#app/schemas/floor-view.ts";
 import { inScope, type ActorScope } from "#app/server/scope.server.ts";
@@ -52,7 +53,7 @@ function lotsWhere(
 ): Promise<FoundLot[]> {
   return em.execute<FoundLot[]>(
     `select l.id, l.name, p.name as program,
-            (select upper(p.slug) || '-H' || lpad(s.number::text, greatest(3, length(s.number::text)), '0')
+            (select ${recordNumberSql("sheet", "s.number")}
                from lot_sheet x join sheet_revision r on r.id = x.revision_id join sheet s on s.id = r.sheet_id
               where x.lot_id = l.id order by x.created_at desc, x.id desc limit 1) as sheet
        from lot l join program p on p.id = l.program_id

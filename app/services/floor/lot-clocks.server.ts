@@ -3,6 +3,7 @@ import { Assessment } from "#app/db/entities/assessment.ts";
 import { FloorEntry } from "#app/db/entities/floor-entry.ts";
 import { runningClocks, type Clock, type ClockMove } from "#app/lib/floor/clocks.ts";
 import type { FloorStep } from "#app/lib/floor/floor-steps.ts";
+import { stepOfLeg } from "#app/lib/step-prediction.ts";
 import type { LotProgress } from "#app/lib/floor/lot-progress.ts";
 import { readLimits } from "../limits.server.ts";
 import type { Pin } from "./lot-sheet.server.ts";
@@ -28,8 +29,7 @@ export async function lotClocks(
     const { revision, step: number, kind, at } = entry;
     if (revision.id === current?.revision.id && entry.leg !== leg) return [];
     const whole = results.find(({ id }) => id === assessments.get(revision.id))?.result;
-    const result = whole?.legs?.[entry.leg - 1]?.result ?? whole;
-    const step = result?.steps.find((each) => each.number === number);
+    const step = whole && number ? stepOfLeg(whole, entry.leg, number) : undefined;
     if (!step || (kind !== "started" && kind !== "done")) return [];
     return [{ kind, stepKind: step.kind, planned: step.planned, at: at.toISOString() }];
   });

@@ -3,7 +3,7 @@ import { Lot } from "#app/db/entities/lot.ts";
 import { LotSheet } from "#app/db/entities/lot-sheet.ts";
 import { SheetRevision } from "#app/db/entities/sheet-revision.ts";
 import { revisionLetters } from "#app/lib/assessment-revision.ts";
-import { sheetNumber } from "#app/lib/sheet-number.ts";
+import { recordNumber } from "#app/lib/record-number.ts";
 import type { ProgramPermission } from "#app/policies/permissions.ts";
 import type { PinnedSheet } from "#app/schemas/floor-view.ts";
 import { notFound } from "#app/server/problem.server.ts";
@@ -46,7 +46,7 @@ export async function pinView(em: EntityManager, { revision, ...pin }: Pin, prog
   return {
     revision: id,
     assessment: assessment.id,
-    number: sheetNumber(programSlug, sheet.number),
+    number: recordNumber("sheet", programSlug, sheet.number),
     letter: revisionLetters(number ?? 1),
     title,
     state,

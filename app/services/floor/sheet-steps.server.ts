@@ -5,7 +5,7 @@ import { SheetDocument } from "#app/db/entities/sheet-document.ts";
 import { slotsInWords } from "#app/engine/flow/legs.ts";
 import { sentenceCase } from "#app/lib/assessment-steps.ts";
 import { floorSteps } from "#app/lib/floor/floor-steps.ts";
-import { inForce } from "../sheets/release-case.server.ts";
+import { coveredBy } from "../sheets/release-case.server.ts";
 
 /**
  * What a released revision says, leg by leg: its frozen papers, the assessment that it rests on, and which of the findings that block
@@ -15,7 +15,7 @@ export async function sheetParts(em: EntityManager, revision: { id: string; asse
   const documents = await em.find(SheetDocument, { revision: revision.id }, { orderBy: { leg: "asc" } });
   const { result } = await em.findOneOrFail(Assessment, { id: revision.assessment.id });
   const deviations = await em.find(Deviation, { revision: revision.id, signedAt: { $ne: null } });
-  const covered = new Set(deviations.filter((each) => inForce(each)).flatMap(({ findings }) => findings));
+  const covered = coveredBy(deviations);
   const legs = result.legs ?? [];
   return {
     result,

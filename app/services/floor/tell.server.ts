@@ -1,7 +1,7 @@
 import type { EntityManager } from "@mikro-orm/postgresql";
 import type { ActorScope } from "#app/server/scope.server.ts";
 import { announce } from "../mail/announce.server.ts";
-import { peopleOf } from "../sheets/revision.server.ts";
+import { peopleOf } from "../people/people-of.server.ts";
 
 interface Held {
   id: string;

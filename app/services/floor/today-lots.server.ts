@@ -2,7 +2,7 @@ import type { EntityManager } from "@mikro-orm/postgresql";
 import { LotHold } from "#app/db/entities/lot-hold.ts";
 import { StepStop } from "#app/db/entities/step-stop.ts";
 import { revisionLetters } from "#app/lib/assessment-revision.ts";
-import { sheetNumber } from "#app/lib/sheet-number.ts";
+import { recordNumber } from "#app/lib/record-number.ts";
 import { SHOWN } from "#app/lib/today-groups.ts";
 import { programsWhere } from "#app/policies/permissions.ts";
 import type { TodayGroup, TodayLot, TodayLots } from "#app/schemas/today.ts";
@@ -74,7 +74,7 @@ async function onOldPaper(em: EntityManager, programs: string[]): Promise<TodayG
         id: row.id,
         lotId: row.id,
         title: `Lot ${row.name}`,
-        words: `Sheet ${sheetNumber(row.slug, row.sheet)} ${revisionLetters(row.number)} is ${row.state}${by}.`,
+        words: `Sheet ${recordNumber("sheet", row.slug, row.sheet)} ${revisionLetters(row.number)} is ${row.state}${by}.`,
         program: row.program,
         at: new Date(row.ended_at).toISOString(),
         mine: true,

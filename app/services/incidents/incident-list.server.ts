@@ -1,6 +1,6 @@
 import { raw, type EntityManager, type FilterQuery, type QueryOrderMap } from "@mikro-orm/postgresql";
 import { Incident } from "#app/db/entities/incident.ts";
-import { incidentNumber } from "#app/lib/incident-number.ts";
+import { readRecordNumber, recordNumber } from "#app/lib/record-number.ts";
 import { PAGE_SIZE, type ListPage, type ListParams } from "#app/lib/list-params.ts";
 import { INCIDENT_KINDS, INCIDENT_STATES, SEVERITIES, type IncidentRow } from "#app/schemas/incident.ts";
 import { inScope, type ActorScope } from "#app/server/scope.server.ts";
@@ -30,21 +30,18 @@ export async function allIncidents(scope: ActorScope, params: ListParams): Promi
   return inScope(scope, (em) => rowsOf(em, whereOf(scope, params), params, MOST_SAVED, 0));
 }
 
-/** 'TERN-I003', as it stands on a page. */
-const NUMBER = /^\s*([a-z0-9-]+)-i0*(\d{1,6})\s*$/i;
-
 function whereOf({ actor }: ActorScope, { query, filters }: ListParams): FilterQuery<Incident> {
   const kind = INCIDENT_KINDS.find((word) => word === filters["what"]);
   const severity = SEVERITIES.find((word) => word === filters["severity"]);
   const state = INCIDENT_STATES.find((word) => word === filters["state"]);
-  const [, slug = "", number = ""] = NUMBER.exec(query) ?? [];
+  const numbered = readRecordNumber("incident", query);
   return {
     program: programFilter(actor, "see the work", filters["program"]),
     ...(kind ? { kind } : {}),
     ...(severity ? { severity } : {}),
     ...(state ? { state } : {}),
-    $and: slug
-      ? [{ number: Number(number), program: { slug: slug.toLowerCase() } }]
+    $and: numbered
+      ? [{ number: numbered.number, program: { slug: numbered.slug } }]
       : everyWord(query, (like) => ({
           $or: [
             { words: like },
@@ -72,7 +69,7 @@ async function rowsOf(
   });
   return incidents.map(({ program, lot, wafer, ...incident }) => ({
     id: incident.id,
-    number: incidentNumber(program.slug, incident.number),
+    number: recordNumber("incident", program.slug, incident.number),
     program: program.name,
     kind: incident.kind,
     severity: incident.severity,

@@ -1,8 +1,7 @@
 import type { EntityManager } from "@mikro-orm/postgresql";
 import { IncidentNote } from "#app/db/entities/incident-note.ts";
 import { IncidentPhoto } from "#app/db/entities/incident-photo.ts";
-import { assessmentNumber } from "#app/lib/assessment-number.ts";
-import { incidentNumber } from "#app/lib/incident-number.ts";
+import { recordNumber } from "#app/lib/record-number.ts";
 import { mayInProgram } from "#app/policies/permissions.ts";
 import type { IncidentView } from "#app/schemas/incident.ts";
 import { inScope, type ActorScope } from "#app/server/scope.server.ts";
@@ -18,11 +17,11 @@ export async function incidentPage(scope: ActorScope, id: string | undefined): P
     const { program, assessment, lot, wafer, radius, azimuth } = incident;
     return {
       id: incident.id,
-      number: incidentNumber(program.slug, incident.number),
+      number: recordNumber("incident", program.slug, incident.number),
       program: program.name,
       assessment: {
         id: assessment.id,
-        number: assessmentNumber(program.slug, assessment.documentNumber),
+        number: recordNumber("assessment", program.slug, assessment.documentNumber),
         flow: assessment.flowName,
         lot: assessment.lot?.name ?? null,
       },

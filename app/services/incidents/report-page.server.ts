@@ -2,7 +2,7 @@ import type { EntityManager } from "@mikro-orm/postgresql";
 import { slotsInWords } from "#app/engine/flow/legs.ts";
 import { Lot } from "#app/db/entities/lot.ts";
 import { Wafer } from "#app/db/entities/wafer.ts";
-import { assessmentNumber } from "#app/lib/assessment-number.ts";
+import { recordNumber } from "#app/lib/record-number.ts";
 import { sentenceCase } from "#app/lib/assessment-steps.ts";
 import { numberedLegs } from "#app/lib/step-prediction.ts";
 import { programsWhere } from "#app/policies/permissions.ts";
@@ -39,7 +39,7 @@ export async function reportPage(scope: ActorScope, search: URLSearchParams): Pr
       ground: {
         assessment: {
           id: assessment.id,
-          number: assessmentNumber(program.slug, assessment.documentNumber),
+          number: recordNumber("assessment", program.slug, assessment.documentNumber),
           flow: assessment.flowName,
           program: program.name,
           lot: assessment.lot?.name ?? null,
@@ -97,6 +97,6 @@ async function choicesOf(em: EntityManager, { actor }: ActorScope): Promise<Repo
   );
   return rows.map(({ id, name, program, slug, document }) => ({
     value: id,
-    label: `${program}: ${name}, ${assessmentNumber(slug, document)}`,
+    label: `${program}: ${name}, ${recordNumber("assessment", slug, document)}`,
   }));
 }

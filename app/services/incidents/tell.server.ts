@@ -1,8 +1,8 @@
 import type { EntityManager } from "@mikro-orm/postgresql";
-import { incidentNumber } from "#app/lib/incident-number.ts";
+import { recordNumber } from "#app/lib/record-number.ts";
 import type { ActorScope } from "#app/server/scope.server.ts";
 import { announce } from "../mail/announce.server.ts";
-import { peopleOf } from "../sheets/revision.server.ts";
+import { peopleOf } from "../people/people-of.server.ts";
 import type { FoundIncident } from "./find-incident.server.ts";
 
 /** Tells the people of the program what happened at which step; technicians only where somebody was in danger or a wafer was lost. */
@@ -19,7 +19,7 @@ export async function tellOfIncident(em: EntityManager, { actor }: ActorScope, i
       path: `/incidents/${id}`,
       lot: lot.name,
       step: `step ${incident.step}, ${incident.stepTitle}`,
-      what: `${incidentNumber(program.slug, number)}, ${kind}, ${severity}. ${words}`.trim(),
+      what: `${recordNumber("incident", program.slug, number)}, ${kind}, ${severity}. ${words}`.trim(),
     },
     key: id,
     to: to.map((person) => person.id),

@@ -1,6 +1,6 @@
 import type { EntityManager } from "@mikro-orm/postgresql";
 import { Incident } from "#app/db/entities/incident.ts";
-import { incidentNumber } from "#app/lib/incident-number.ts";
+import { recordNumber } from "#app/lib/record-number.ts";
 import { SHOWN } from "#app/lib/today-groups.ts";
 import { programsWhere } from "#app/policies/permissions.ts";
 import type { TodayGroup, TodayIncident } from "#app/schemas/today.ts";
@@ -18,7 +18,7 @@ export async function incidentsOfToday(em: EntityManager, { actor }: ActorScope)
     total,
     rows: incidents.map(({ id, program, number, kind, severity, lot, step, stepTitle, words, occurredAt }) => ({
       id,
-      title: `${incidentNumber(program.slug, number)}, ${kind} at step ${step}, ${stepTitle}`,
+      title: `${recordNumber("incident", program.slug, number)}, ${kind} at step ${step}, ${stepTitle}`,
       severity,
       words,
       lot: lot.name,

@@ -6,8 +6,8 @@ import type { DelegatesView, DelegationRow, DelegationValues } from "#app/schema
 import { notFound, problem } from "#app/server/problem.server.ts";
 import { inScope, type ActorScope } from "#app/server/scope.server.ts";
 import { requireInProgram, requireInSomeProgram } from "../permission.server.ts";
-import { peopleOf } from "../sheets/revision.server.ts";
 import { idFrom } from "../uuid.server.ts";
+import { peopleOf } from "./people-of.server.ts";
 
 const NAME = "name a delegate";
 

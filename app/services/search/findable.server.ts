@@ -1,3 +1,4 @@
+import { recordNumberSql } from "#app/lib/record-number.ts";
 import { mayOnSite, programsWhere } from "#app/policies/permissions.ts";
 import type { Actor } from "#app/policies/roles.ts";
 
@@ -21,10 +22,6 @@ const seesLibrary = (actor: Actor) => mayOnSite(actor, "see the library");
 
 /** A day as lists show it. */
 const day = (column: string) => `to_char(${column} at time zone 'UTC', 'YYYY-MM-DD')`;
-
-/** A number as paper and lists show it, such as 'TERN-H003', of a program called `p`. */
-const numbered = (letter: string, column: string) =>
-  `upper(p.slug) || '-${letter}' || lpad(${column}::text, greatest(3, length(${column}::text)), '0')`;
 
 /** Something of a program that has a name of its own. */
 const ofProgram = (title: string, table: "stack" | "flow"): Findable => ({
@@ -51,7 +48,7 @@ export const FINDABLE = {
   stack: ofProgram("Stacks", "stack"),
   assessment: {
     title: "Assessments",
-    rows: `select x.id, ${numbered("A", "x.document_number")} as name,
+    rows: `select x.id, ${recordNumberSql("assessment", "x.document_number")} as name,
                   concat_ws(', ', x.flow_name, 'lot ' || (x.lot->>'name'), x.outcome, ${day("x.created_at")}) as about,
                   coalesce(x.lot->>'name', '') as also, '/assessments/' || x.id as path, x.program_id
              from assessment x join program p on p.id = x.program_id`,
@@ -60,7 +57,7 @@ export const FINDABLE = {
   },
   sheet: {
     title: "Sheets",
-    rows: `select x.id, ${numbered("H", "s.number")} as name,
+    rows: `select x.id, ${recordNumberSql("sheet", "s.number")} as name,
                   concat_ws(', ', x.title, x.state, ${day("coalesce(x.ended_at, x.decided_at)")}) as about,
                   x.title as also, '/sheets/revisions/' || x.id as path, x.program_id
              from (select distinct on (sheet_id) * from sheet_revision where number is not null
@@ -72,7 +69,7 @@ export const FINDABLE = {
   },
   incident: {
     title: "Incidents",
-    rows: `select x.id, ${numbered("I", "x.number")} as name,
+    rows: `select x.id, ${recordNumberSql("incident", "x.number")} as name,
                   concat_ws(', ', x.kind, 'lot ' || l.name, 'step ' || x.step || ', ' || x.step_title,
                             ${day("x.occurred_at")}) as about,
                   concat_ws(' ', x.words, x.step_title, l.name) as also, '/incidents/' || x.id as path, x.program_id

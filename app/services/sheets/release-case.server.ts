@@ -11,6 +11,10 @@ import { hasNewer, restsOnOldInputs } from "./still-newest.server.ts";
 export const inForce = ({ signedAt, until }: Pick<Deviation, "signedAt" | "until">, now = new Date()): boolean =>
   signedAt !== null && signedAt !== undefined && until > now;
 
+/** Keys of the blocking findings that deviations in force let run. */
+export const coveredBy = (deviations: readonly Pick<Deviation, "signedAt" | "until" | "findings">[]): Set<string> =>
+  new Set(deviations.filter((each) => inForce(each)).flatMap(({ findings }) => findings));
+
 /** What decides a release, with everything that it was decided from. */
 export async function releaseCaseOf(em: EntityManager, scope: ActorScope, revision: FoundRevision) {
   const assessment = await findAssessment(em, scope, revision.assessment.id);
@@ -19,7 +23,7 @@ export async function releaseCaseOf(em: EntityManager, scope: ActorScope, revisi
     { revision: revision.id },
     { populate: ["createdBy", "signedBy"], orderBy: { createdAt: "asc", id: "asc" } },
   );
-  const covered = new Set(deviations.filter((each) => inForce(each)).flatMap(({ findings }) => findings));
+  const covered = coveredBy(deviations);
   const blocking = blockingFindings(assessment.result);
   const { inputHash, resultHash } = fingerprints(assessment);
   const releaseCase: ReleaseCase = {

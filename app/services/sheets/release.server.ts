@@ -6,7 +6,7 @@ import { SheetRevision } from "#app/db/entities/sheet-revision.ts";
 import { revisionLetters } from "#app/lib/assessment-revision.ts";
 import { minuteOf } from "#app/lib/minute-of.ts";
 import { sheetDocumentOf } from "#app/lib/sheet/sheet-document-of.ts";
-import { sheetNumber } from "#app/lib/sheet-number.ts";
+import { recordNumber } from "#app/lib/record-number.ts";
 import { changesInLines } from "#app/lib/since-release.ts";
 import { statusPath } from "#app/lib/status-path.ts";
 import { inPlaceOf } from "#app/policies/permissions.ts";
@@ -65,7 +65,7 @@ async function prepare(
   const number = (last?.number ?? 0) + 1;
   const changes = last ? changesInLines(last.before, assessment, last.changes) : [];
   const release = {
-    number: sheetNumber(revision.program.slug, revision.sheet.number),
+    number: recordNumber("sheet", revision.program.slug, revision.sheet.number),
     revision: revisionLetters(number),
     status: "released" as const,
     supersededBy: null,

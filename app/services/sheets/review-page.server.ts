@@ -2,10 +2,9 @@ import type { EntityManager } from "@mikro-orm/postgresql";
 import type { Deviation } from "#app/db/entities/deviation.ts";
 import { SheetComment } from "#app/db/entities/sheet-comment.ts";
 import { Sheet } from "#app/db/entities/sheet.ts";
-import { assessmentNumber } from "#app/lib/assessment-number.ts";
+import { recordNumber } from "#app/lib/record-number.ts";
 import { revisionLetters } from "#app/lib/assessment-revision.ts";
 import { blockingFindings } from "#app/lib/blocking-findings.ts";
-import { sheetNumber } from "#app/lib/sheet-number.ts";
 import { sinceRelease } from "#app/lib/since-release.ts";
 import { inPlaceOf, mayInProgram } from "#app/policies/permissions.ts";
 import { releaseObstacles } from "#app/policies/release.ts";
@@ -34,11 +33,11 @@ export async function reviewPage(scope: ActorScope, assessmentId: string | undef
       assessment: {
         id: assessment.id,
         name: assessment.flowName,
-        number: assessmentNumber(program.slug, assessment.documentNumber),
+        number: recordNumber("assessment", program.slug, assessment.documentNumber),
         letter: revisionLetters(assessment.number),
         program: program.name,
       },
-      sheet: sheet && sheetNumber(program.slug, sheet.number),
+      sheet: sheet && recordNumber("sheet", program.slug, sheet.number),
       revision: revision?.view ?? null,
       steps: result.steps.map(({ number, title }) => ({ number, title })),
       blocking: blockingFindings(result),

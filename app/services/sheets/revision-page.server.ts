@@ -6,7 +6,7 @@ import { SheetPrint } from "#app/db/entities/sheet-print.ts";
 import { SheetRevision } from "#app/db/entities/sheet-revision.ts";
 import { slotsInWords } from "#app/engine/flow/legs.ts";
 import { revisionLetters } from "#app/lib/assessment-revision.ts";
-import { sheetNumber } from "#app/lib/sheet-number.ts";
+import { recordNumber } from "#app/lib/record-number.ts";
 import { mayInProgram } from "#app/policies/permissions.ts";
 import type { RevisionView } from "#app/schemas/sheet-view.ts";
 import { inScope, type ActorScope } from "#app/server/scope.server.ts";
@@ -27,7 +27,7 @@ export async function revisionPage(scope: ActorScope, revisionId: string | undef
     const staff = mayInProgram(scope.actor, "see the work", program.id);
     return {
       id,
-      sheet: sheetNumber(program.slug, sheet.number),
+      sheet: recordNumber("sheet", program.slug, sheet.number),
       letter: revisionLetters(number),
       state: standing.status,
       title,

@@ -70,17 +70,3 @@ const sha256 = (value: unknown) => createHash("sha256").update(canonicalJson(val
 export function fingerprints(assessment: Pick<Assessment, "result"> & { input: { $: unknown } }) {
   return { inputHash: sha256(assessment.input.$), resultHash: sha256(assessment.result) };
 }
-
-/** People of a program by id, for its staff. */
-export interface ProgramPerson {
-  id: string;
-  name: string;
-  role: "guest" | "technician" | "engineer" | "process owner";
-  /** stands in for a process owner now */
-  stands_in: boolean;
-}
-
-/** The active people of a program; nobody for who is not of its staff. */
-export function peopleOf(em: EntityManager, programId: string): Promise<ProgramPerson[]> {
-  return em.execute<ProgramPerson[]>("select * from program_people(?) order by name", [programId]);
-}

@@ -7,7 +7,7 @@ import { revisionLetters } from "#app/lib/assessment-revision.ts";
 import type { Paper } from "#app/lib/paper-size.ts";
 import { markedDocument } from "#app/lib/sheet/marked-document.ts";
 import { markWords, type RevisionStanding } from "#app/lib/sheet/revision-words.ts";
-import { sheetNumber } from "#app/lib/sheet-number.ts";
+import { recordNumber } from "#app/lib/record-number.ts";
 import { mayInProgram } from "#app/policies/permissions.ts";
 import type { SheetFormat, SheetPages } from "#app/schemas/sheet-revision.ts";
 import type { PrintForm } from "#app/schemas/sheet-view.ts";
@@ -92,7 +92,7 @@ async function lookUp(em: EntityManager, scope: ActorScope, revisionId: string |
     mark: markWords(standing) ?? "",
   };
   const file = await em.findOne(SheetFile, key, { populate: ["bytes"] });
-  const name = `Handling-risk sheet ${sheetNumber(revision.program.slug, revision.sheet.number)} ${revisionLetters(revision.number)}`;
+  const name = `Handling-risk sheet ${recordNumber("sheet", revision.program.slug, revision.sheet.number)} ${revisionLetters(revision.number)}`;
   if (file) return { stored: { id: file.id, bytes: new Uint8Array(await file.bytes.loadOrFail()), name } };
   const document = await em.findOne(SheetDocument, { revision: revision.id, leg: asked.leg });
   if (!document || key.mark === "") throw notFound("sheet");

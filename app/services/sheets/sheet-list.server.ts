@@ -2,7 +2,7 @@ import { raw, type QueryOrderMap } from "@mikro-orm/postgresql";
 import { SheetRevision } from "#app/db/entities/sheet-revision.ts";
 import { revisionLetters } from "#app/lib/assessment-revision.ts";
 import { PAGE_SIZE, type ListPage, type ListParams } from "#app/lib/list-params.ts";
-import { sheetNumber } from "#app/lib/sheet-number.ts";
+import { readRecordNumber, recordNumber } from "#app/lib/record-number.ts";
 import { REVISION_STATES } from "#app/schemas/sheet-revision.ts";
 import type { SheetRow } from "#app/schemas/sheet-view.ts";
 import { inScope, type ActorScope } from "#app/server/scope.server.ts";
@@ -36,7 +36,7 @@ export async function listSheets(scope: ActorScope, params: ListParams): Promise
       return {
         id,
         assessmentId: assessment.id,
-        sheet: sheetNumber(program.slug, sheet.number),
+        sheet: recordNumber("sheet", program.slug, sheet.number),
         letter: number ? revisionLetters(number) : null,
         state: revision.state,
         flow: title,
@@ -51,9 +51,9 @@ export async function listSheets(scope: ActorScope, params: ListParams): Promise
 
 /** By the name of the flow, or by the number that stands on paper. */
 function namedLike(query: string) {
-  const [, slug = "", number = ""] = /^\s*([a-z0-9-]+)-h0*(\d{1,6})\b/i.exec(query) ?? [];
-  if (slug === "") return { title: { $ilike: `%${escapeLike(query)}%` } };
-  return { sheet: { number: Number(number), program: { slug: slug.toLowerCase() } } };
+  const numbered = readRecordNumber("sheet", query);
+  if (!numbered) return { title: { $ilike: `%${escapeLike(query)}%` } };
+  return { sheet: { number: numbered.number, program: { slug: numbered.slug } } };
 }
 
 /** By default what waits for somebody first, then what is in force, then what has ended; the newest of each first. */

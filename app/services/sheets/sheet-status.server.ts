@@ -1,5 +1,5 @@
 import { revisionLetters } from "#app/lib/assessment-revision.ts";
-import { sheetNumber } from "#app/lib/sheet-number.ts";
+import { recordNumber } from "#app/lib/record-number.ts";
 import type { SheetStatus } from "#app/schemas/sheet-view.ts";
 import { inScope } from "#app/server/scope.server.ts";
 
@@ -23,7 +23,7 @@ export async function sheetStatus(token: string, requestId: string): Promise<She
   );
   if (!row) return null;
   return {
-    sheet: sheetNumber(row.slug, row.sheet_number),
+    sheet: recordNumber("sheet", row.slug, row.sheet_number),
     letter: revisionLetters(row.number),
     state: row.state,
     releasedAt: new Date(row.decided_at).toISOString(),

@@ -1,10 +1,11 @@
 import type { EntityManager } from "@mikro-orm/postgresql";
 import { revisionLetters } from "#app/lib/assessment-revision.ts";
-import { sheetNumber } from "#app/lib/sheet-number.ts";
+import { recordNumber } from "#app/lib/record-number.ts";
 import type { AnnouncementInput } from "#app/schemas/announcement.ts";
 import type { ActorScope } from "#app/server/scope.server.ts";
 import { announce } from "../mail/announce.server.ts";
-import { findRevision, peopleOf, type FoundRevision } from "./revision.server.ts";
+import { peopleOf } from "../people/people-of.server.ts";
+import { findRevision, type FoundRevision } from "./revision.server.ts";
 
 /** Tells the process owners of the program, and who stands in for one, that a review waits for one of them. */
 export async function tellReviewAsked(em: EntityManager, scope: ActorScope, revisionId: string): Promise<void> {
@@ -71,7 +72,13 @@ const reviewPath = ({ assessment }: FoundRevision) => `/assessments/${assessment
 const sheetPath = ({ id }: FoundRevision) => `/sheets/revisions/${id}`;
 
 function about({ actor }: ActorScope, { program, sheet, title }: FoundRevision, path: string) {
-  return { program: program.name, by: actor.name, path, sheet: sheetNumber(program.slug, sheet.number), flow: title };
+  return {
+    program: program.name,
+    by: actor.name,
+    path,
+    sheet: recordNumber("sheet", program.slug, sheet.number),
+    flow: title,
+  };
 }
 
 function tell(

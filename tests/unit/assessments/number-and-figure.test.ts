@@ -1,13 +1,24 @@
 import { describe, expect, it } from "vitest";
 import { celsius, figureText, micrometres } from "#app/lib/assessment-figure.ts";
-import { assessmentNumber } from "#app/lib/assessment-number.ts";
+import { readRecordNumber, recordNumber } from "#app/lib/record-number.ts";
 
 const nb = (text: string) => text.replaceAll(" ", "\u00A0").replaceAll("\u00A0±\u00A0", " ± ");
 
 describe("a document number", () => {
   it("names the program and counts in it", () => {
-    expect(assessmentNumber("tern", 3)).toBe("TERN-A003");
-    expect(assessmentNumber("petrel", 1204)).toBe("PETREL-A1204");
+    expect(recordNumber("assessment", "tern", 3)).toBe("TERN-A003");
+    expect(recordNumber("assessment", "petrel", 1204)).toBe("PETREL-A1204");
+  });
+
+  it.each(["assessment", "sheet", "incident"] as const)("of each kind, %s, is read as it is written", (kind) => {
+    for (const number of [3, 999, 12_345])
+      expect(readRecordNumber(kind, recordNumber(kind, "tern", number))).toEqual({ slug: "tern", number });
+    expect(readRecordNumber(kind, "tern t-2")).toBeNull();
+  });
+
+  it("is read with a revision behind it, and not as another kind", () => {
+    expect(readRecordNumber("sheet", " tern-h003 B")).toEqual({ slug: "tern", number: 3 });
+    expect(readRecordNumber("incident", "TERN-H003")).toBeNull();
   });
 });
 

@@ -1,6 +1,6 @@
 import { data, redirect } from "react-router";
 import { AssessmentPage } from "#app/components/assessments/AssessmentPage.tsx";
-import { assessmentNumber } from "#app/lib/assessment-number.ts";
+import { recordNumber } from "#app/lib/record-number.ts";
 import { assessmentView } from "#app/lib/assessment-view.ts";
 import { scopeOf } from "#app/server/contexts.server.ts";
 import { problem } from "#app/server/problem.server.ts";
@@ -10,7 +10,11 @@ import type { Route } from "./+types/assessment";
 
 export const meta: Route.MetaFunction = ({ loaderData }) => {
   const head = loaderData?.view.head;
-  return [{ title: `${head ? assessmentNumber(head.program.slug, head.documentNumber) : "Assessment"} · Planeward` }];
+  return [
+    {
+      title: `${head ? recordNumber("assessment", head.program.slug, head.documentNumber) : "Assessment"} · Planeward`,
+    },
+  ];
 };
 
 export async function loader({ context, params, url }: Route.LoaderArgs) {
