@@ -6,7 +6,7 @@ import { Rate } from "./RateTable.tsx";
 export function BreakageMap({ map, all }: { map: IncidentRates["map"]; all: RateRow }) {
   if (map.rows.length === 0) return null;
   return (
-    <div className="mt-6 overflow-x-auto" tabIndex={0} role="region" aria-label="Breakage map">
+    <div className="mt-6 overflow-x-auto print:break-inside-avoid" tabIndex={0} role="region" aria-label="Breakage map">
       <table className="table">
         <caption className="pb-2 text-left font-semibold">Breakage over silicon thickness and support</caption>
         <thead>

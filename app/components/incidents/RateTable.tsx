@@ -17,7 +17,7 @@ const AGAINST = { above: "above the rest", below: "below the rest" };
 /** Counts and rates of one way to part the steps. */
 export function RateTable({ caption, head, rows, all }: Props) {
   return (
-    <div className="mt-6 overflow-x-auto" tabIndex={0} role="region" aria-label={caption}>
+    <div className="mt-6 overflow-x-auto print:break-inside-avoid" tabIndex={0} role="region" aria-label={caption}>
       <table className="table">
         <caption className="pb-2 text-left font-semibold">{caption}</caption>
         <thead>
