@@ -123,8 +123,9 @@ test.describe("an engineer", () => {
     await press(page, "Keep");
     await expect(page).toHaveURL(/\/flows\/library\/flows\//);
     const template = new URL(page.url()).pathname;
-    const name = await page.getByRole("heading", { level: 1 }).innerText();
+    // The address changes before the page does.
     await expect(page.getByRole("link", { name: "make a flow from it" })).toBeVisible();
+    const name = await page.getByRole("heading", { level: 1 }).innerText();
     await page.goto(`${path}/keep`);
     const kept = page.getByLabel("Keep it as");
     await kept.selectOption(template.split("/").at(-1) ?? "");

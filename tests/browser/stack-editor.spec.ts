@@ -151,6 +151,23 @@ test.describe("an engineer", () => {
     await expect(field(page, "layers[2].thickness.value")).toHaveValue("5um");
   });
 
+  test("draws a film where it is now, as soon as the list says so", async ({ page }) => {
+    await fillNew(page, nameFor("lag"));
+    const slow = await page.context().newCDPSession(page);
+    await slow.send("Emulation.setCPUThrottlingRate", { rate: 6 });
+    const said = await page.evaluate(async () => {
+      const first = () => document.querySelector("details[id^=layer-] > summary");
+      const before = first()?.textContent;
+      const down = { key: "ArrowDown", altKey: true, bubbles: true, cancelable: true };
+      first()?.dispatchEvent(new KeyboardEvent("keydown", down));
+      while (first()?.textContent === before) await new Promise((done) => setTimeout(done));
+      return document.querySelector('a[data-layer="0"]')?.getAttribute("aria-label");
+    });
+    await slow.send("Emulation.setCPUThrottlingRate", { rate: 1 });
+    expect(said).toMatch(COPPER);
+    await inOrder(page, COPPER, POLYMER);
+  });
+
   test("drags a film in the cut, through the silicon too", async ({ page }) => {
     // So that all of the cut is within reach of the mouse.
     await page.setViewportSize({ width: 1440, height: 1400 });

@@ -26,6 +26,7 @@ import { StackToolBar } from "./StackToolBar.tsx";
 import type { CutPartOf } from "./stack-cut-layers.ts";
 import { NEW, useKeptDraft } from "./use-kept-draft.ts";
 import { useSaveOnceSaid } from "./use-save-once-said.ts";
+import { useDrawn } from "./use-drawn.ts";
 import { useLayerEdits } from "./use-layer-edits.ts";
 import { useLiveEstimate } from "./use-live-estimate.ts";
 import { useSelectedLayer } from "./use-selected-layer.ts";
@@ -79,11 +80,12 @@ export function StackEditor(props: Props) {
   const { temperature, read } = useMemo(() => viewTemperature(at), [at]);
   const requests = useMemo(() => panelRequests(draft, temperature), [draft, temperature]);
   const live = useLiveEstimate(requests, props.panel, limits);
-  const [drawn, panel] = [useDeferredValue(draft), useDeferredValue(live.panel)];
+  const panel = useDeferredValue(live.panel);
   const focusPart = useCallback((part: CutPartOf) => {
     focusField(part === "silicon" ? "siliconThickness.value" : `layers[${part}].film`);
   }, []);
   const filmKeys = fields.layers.getFieldList().map(({ key }) => key ?? "");
+  const drawn = useDrawn(draft, typed.layers.map(({ side }, index) => `${filmKeys[index] ?? ""} ${side}`).join());
   const selection = useSelectedLayer(filmKeys, focusPart);
   const edits = useLayerEdits({
     form,
@@ -152,7 +154,7 @@ export function StackEditor(props: Props) {
         </noscript>
       </>
     ),
-    [view, others, at, read],
+    [view, others, at, setAt, read],
   );
   const [found] = lastResult ? [] : kept.offered;
   return (
