@@ -1,19 +1,16 @@
-import { spawn, type ChildProcess } from "node:child_process";
-import { once } from "node:events";
-import { fileURLToPath } from "node:url";
-import { afterEach, beforeAll, expect, test } from "vitest";
+import { beforeAll, expect, test } from "vitest";
 import type { ActorScope } from "#app/server/scope.server.ts";
 import { scopeOfPerson } from "#tests/db/people.ts";
 import { asOwner, useDatabase } from "#tests/db/test-database.ts";
 import type { Deed } from "./deed-in-process.ts";
+import { useDeeds } from "./killed-deed.ts";
 
 const database = useDatabase({ demo: true });
-const root = fileURLToPath(new URL("../..", import.meta.url));
 const LONG = { timeout: 120_000 };
 
 let engineer: ActorScope;
 let owner: ActorScope;
-const started: ChildProcess[] = [];
+const { done, killedBeforeItsEnd } = useDeeds(database);
 
 // Loading the server's modules takes longer than a test should.
 beforeAll(async () => {
@@ -21,66 +18,6 @@ beforeAll(async () => {
   engineer = await scopeOfPerson(database, "engineer");
   owner = await scopeOfPerson(database, "process-owner");
 }, 90_000);
-
-afterEach(() => {
-  for (const child of started.splice(0)) child.kill("SIGKILL");
-});
-
-function start(deed: Deed): ChildProcess {
-  const child = spawn(
-    process.execPath,
-    ["--import", "tsx", "tests/services/deed-in-process.ts", JSON.stringify(deed)],
-    {
-      cwd: root,
-      env: { ...process.env, DATABASE_URL: database.appUrl, NODE_ENV: "production", LOG_LEVEL: "silent" },
-      stdio: ["ignore", "ignore", "inherit"],
-    },
-  );
-  started.push(child);
-  return child;
-}
-
-/** Does the deed in a process that is killed when all it has left to do is to tell people, then says that nothing of it is there. */
-async function killedBeforeItsEnd(deed: Deed): Promise<void> {
-  const em = database.owner.em.fork();
-  await em.transactional(async (held) => {
-    await held
-      .getConnection()
-      .execute("lock table mail_outbox in access exclusive mode", [], "run", held.getTransactionContext());
-    const child = start(deed);
-    await expect
-      .poll(
-        async () => {
-          const [row] = await asOwner<{ waiting: number }>(
-            database,
-            `select count(*)::int as waiting from pg_locks
-             where relation = 'mail_outbox'::regclass and not granted and database = (select oid from pg_database where datname = current_database())`,
-          );
-          return row?.waiting;
-        },
-        { timeout: 60_000 },
-      )
-      .toBe(1);
-    child.kill("SIGKILL");
-    await once(child, "exit");
-  });
-  // The server of the database notices by itself that nobody is there any more.
-  await expect
-    .poll(
-      async () =>
-        asOwner(
-          database,
-          `select pid from pg_stat_activity where datname = current_database() and state = 'idle in transaction' and usename <> current_user`,
-        ),
-      { timeout: 30_000 },
-    )
-    .toEqual([]);
-}
-
-async function done(deed: Deed): Promise<void> {
-  const [code] = (await once(start(deed), "exit")) as [number | null];
-  expect(code).toBe(0);
-}
 
 /** Everything that a deed on a sheet leaves behind. */
 async function traces() {
