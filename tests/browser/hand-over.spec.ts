@@ -18,6 +18,8 @@ const heldLot = (name: string) =>
     );
   });
 
+test.use({ refusals: true });
+
 test("a place is handed over by one shift and taken by the next", async ({ page }) => {
   const lot = `H-${Date.now().toString(36)}`;
   const place = `Grinding bay ${Date.now().toString(36)}`;
@@ -29,12 +31,16 @@ test("a place is handed over by one shift and taken by the next", async ({ page 
   await expectNoAxeFindings(page);
   await page.getByRole("link", { name: "Hand a place over" }).click();
   await expectNoAxeFindings(page);
-  await page.getByLabel("Place").fill(place);
-  await page.getByLabel(`Lot ${lot} is on`).fill("frame 7");
+  await page.getByLabel("Place", { exact: true }).fill(place);
   await page.getByRole("button", { name: "Hand it over" }).click();
   await expect(page.getByText("Tick the lots that are there.")).toBeVisible();
-  await expect(page.getByLabel(`Lot ${lot} is on`)).toHaveValue("frame 7");
+  await expect(page.getByLabel("Place", { exact: true })).toHaveValue(place);
   await page.getByRole("checkbox", { name: lot }).check();
+  await page.getByRole("button", { name: "Hand it over" }).click();
+  await expect(page.getByText("Say which carrier, frame or tool it is on.")).toBeVisible();
+  await expect(page.getByRole("checkbox", { name: lot })).toBeChecked();
+  await expectNoAxeFindings(page);
+  await page.getByLabel(`Lot ${lot} is on`).fill("frame 7");
   await page.getByRole("button", { name: "Hand it over" }).click();
   await expect(page.getByText("The place is handed over.")).toBeVisible();
   await page.getByRole("link", { name: place }).click();

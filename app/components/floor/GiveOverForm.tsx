@@ -99,7 +99,7 @@ type LotField = FieldMetadata<Values["lots"][number]>;
 function LotRow({ field, lot }: { field: LotField; lot: LotAtPlace }) {
   const parts = field.getFieldset();
   return (
-    <li className="border-b border-line py-3">
+    <li className="group border-b border-line py-3">
       <label className="flex min-h-14 items-center gap-4">
         <input
           type="checkbox"
@@ -116,9 +116,10 @@ function LotRow({ field, lot }: { field: LotField; lot: LotAtPlace }) {
           </span>
         </span>
       </label>
-      <div className="grid gap-3 tablet:grid-cols-2">
+      {/* Asked of what is there only, so that many lots are still quickly gone through. */}
+      <div className="hidden gap-3 group-has-checked:grid tablet:grid-cols-2">
         <LineField field={parts.on} label={`Lot ${lot.name} is on`} hint="Carrier, frame or tool." />
-        <LineField field={parts.remark} label={`Of lot ${lot.name}`} hint="May stay empty." />
+        <LineField field={parts.remark} label={`What to know of lot ${lot.name}`} hint="May stay empty." />
       </div>
     </li>
   );
