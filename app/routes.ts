@@ -29,6 +29,9 @@ export default [
       route("lots/:lotId", "routes/_floor/lot.tsx"),
       route("lots/:lotId/entries", "routes/_floor/entries.ts"),
       route("lots/:lotId/steps/:number", "routes/_floor/step.tsx"),
+      route("hand-overs", "routes/_floor/hand-overs.tsx"),
+      route("hand-overs/new", "routes/_floor/give-over.tsx"),
+      route("hand-overs/:handOverId", "routes/_floor/hand-over.tsx"),
     ]),
   ]),
   layout("routes/_app/layout.tsx", [

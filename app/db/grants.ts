@@ -32,6 +32,7 @@ const NEVER_TAKEN_OUT = [
   "lot_hold",
   "step_stop",
   "incident",
+  "hand_over",
 ];
 /** One row that the migration puts in. */
 const READ_AND_CHANGE = ["site_setting"];

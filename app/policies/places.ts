@@ -34,6 +34,12 @@ const WITHIN: (Page & { open: (actor: Actor) => boolean })[] = [
   { name: "E-mail", path: "/preferences/mail", also: "mail, digest, unsubscribe, notifications", open: () => true },
   { name: "Delegates", path: "/delegates", also: "who stands in for a process owner, absence, leave", open: seesWork },
   {
+    name: "Hand-overs",
+    path: "/floor/hand-overs",
+    also: "shift, take over a place",
+    open: (actor) => programsWhere(actor, "work on the floor").length > 0,
+  },
+  {
     name: "Outbox",
     path: "/mail/outbox",
     also: "mail that waits, was sent or is parked",

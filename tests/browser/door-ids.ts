@@ -26,6 +26,7 @@ export const WALLED: readonly string[] = [
   "revisionId",
   "incidentId",
   "photoId",
+  "handOverId",
 ];
 
 type Query = <Row>(sql: string, params?: unknown[]) => Promise<Row[]>;
@@ -186,6 +187,13 @@ async function reportedIncident(engineer: APIRequestContext, assessment: string)
     return {
       incidentId,
       photoId: await idOf(query, "select id from incident_photo where incident_id = ?", [incidentId]),
+      handOverId: await idOf(
+        query,
+        `insert into hand_over (id, program_id, given, place, remark, lots, given_at, given_by_id)
+           select gen_random_uuid(), program_id, gen_random_uuid(), 'At the door', '', '[]', now(), created_by_id
+             from incident where id = ? returning id`,
+        [incidentId],
+      ),
     };
   });
 }
@@ -242,6 +250,7 @@ export function strangeIds(own: DoorIds): Promise<DoorIds> {
       stackId: await copy("stack", own["stackId"]),
       readingId,
       lotId,
+      handOverId: await copy("hand_over", own["handOverId"]),
       waferScanId: await copy("wafer_scan", own["waferScanId"], { wafer_id: wafer, reading_id: readingId }),
       jobId: await copy("job", own["jobId"]),
       waferId: await copy("wafer", own["waferId"], { lot_id: null }),

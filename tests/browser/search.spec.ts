@@ -79,8 +79,11 @@ test("what was opened and marked stands in the palette and on Today", async ({ p
     .click();
   const star = page.getByRole("button", { name: "Favourite" });
   await expect(star).toHaveAttribute("aria-pressed", "false");
+  // It shows at once, before the server has it; a page that is left at that moment takes the request along.
+  const marked = page.waitForResponse((answer) => answer.request().method() === "POST");
   await star.click();
   await expect(star).toHaveAttribute("aria-pressed", "true");
+  await marked;
   const name = await page.getByRole("heading", { level: 1 }).innerText();
   await page.goto("/");
   for (const group of ["Favourites", "Recently opened"])

@@ -37,6 +37,7 @@ const PROGRAM_TABLES = [
   "incident",
   "incident_note",
   "incident_photo",
+  "hand_over",
   "mail_outbox",
 ];
 const SITE_TABLES = [

@@ -5,20 +5,16 @@ import { refusedSentence } from "#app/server/problem.server.ts";
 import type { ActorScope } from "#app/server/scope.server.ts";
 import { scopeOfPerson } from "#tests/db/people.ts";
 import { asOwner, useDatabase } from "#tests/db/test-database.ts";
+import { newLot, releaseFirstFlow } from "./lot-on-sheet.ts";
 
 const database = useDatabase({ demo: true });
 
-const assessments = () => import("#app/services/assessments/assessments.server.ts");
-const asking = () => import("#app/services/sheets/ask-review.server.ts");
-const reviewing = () => import("#app/services/sheets/review-page.server.ts");
-const releasing = () => import("#app/services/sheets/release.server.ts");
 const withdrawing = () => import("#app/services/sheets/withdraw.server.ts");
 const assigning = () => import("#app/services/floor/assign-sheet.server.ts");
 const entering = () => import("#app/services/floor/entries.server.ts");
 const blocking = () => import("#app/services/floor/hold-and-stop.server.ts");
 const looking = () => import("#app/services/floor/floor-lot.server.ts");
 
-const ORIGIN = "https://planeward.site.example";
 const LONG = { timeout: 60_000 };
 const status = (code: number) => expect.objectContaining({ init: { status: code } }) as unknown;
 
@@ -42,40 +38,10 @@ beforeAll(async () => {
   guest = await scopeOfPerson(database, "guest");
   const [program] = await asOwner<{ id: string }>(database, "select id from program where slug = 'tern'");
   tern = program?.id ?? "";
-  revision = await release("tern");
-  lot = await newLot("T-0420", "tern");
-  other = await newLot("T-0421", "tern");
+  revision = await releaseFirstFlow(database, "tern");
+  lot = await newLot(database, "T-0420", "tern");
+  other = await newLot(database, "T-0421", "tern");
 }, 120_000);
-
-/** Assesses the first flow of a program, has it reviewed and releases it. */
-async function release(slug: string): Promise<string> {
-  const { runAssessment } = await assessments();
-  const { askReview } = await asking();
-  const { reviewPage } = await reviewing();
-  const { releaseRevision } = await releasing();
-  const [flow] = await asOwner<{ id: string }>(
-    database,
-    "select f.id from flow f join program p on p.id = f.program_id where p.slug = ? order by f.name limit 1",
-    [slug],
-  );
-  const ran = await runAssessment(engineer, flow?.id ?? "");
-  if (ran.outcome !== "stored") throw new Error(ran.outcome);
-  await askReview(engineer, ran.id, "");
-  const id = (await reviewPage(engineer, ran.id)).revision?.id ?? "";
-  await releaseRevision(owner, id, "", ORIGIN);
-  return id;
-}
-
-async function newLot(name: string, slug: string): Promise<string> {
-  const id = randomUUID();
-  await asOwner(
-    database,
-    `insert into lot (id, program_id, name, note, created_at, created_by_id)
-       select ?, p.id, ?, '', now(), ? from program p where p.slug = ?`,
-    [id, name, engineer.actor.id, slug],
-  );
-  return id;
-}
 
 type Content = Pick<FloorEntryForm, "kind"> & Record<string, unknown>;
 
@@ -109,7 +75,7 @@ describe("a lot on a sheet", () => {
     await expect(assignSheet(technician, lot, values)).rejects.toEqual(status(403));
     await expect(assignSheet(guest, lot, values)).rejects.toEqual(status(404));
     expect(await assignSheet(engineer, lot, { ...values, fromStep: 99 })).toMatchObject({ field: "fromStep" });
-    const strange = await newLot("P-7", "petrel");
+    const strange = await newLot(database, "P-7", "petrel");
     expect(await assignSheet(engineer, strange, values)).toMatchObject({ field: "revision" });
     expect(await assignSheet(engineer, lot, values)).toEqual({ outcome: "stored" });
     expect(await assignSheet(engineer, other, values)).toEqual({ outcome: "stored" });
@@ -233,7 +199,7 @@ describe("a hold and a stop", () => {
 describe("a newer revision", () => {
   test("leaves the lot where it is, told and blocked, until a person moves it with a reason", LONG, async () => {
     const { assignSheet } = await assigning();
-    const newer = await release("tern");
+    const newer = await releaseFirstFlow(database, "tern");
     expect((await look(technician)).sheet?.pin).toMatchObject({ state: "superseded", successor: { letter: "B" } });
     expect(await say(technician, entry({ kind: "done", count: null }, 2))).toBe("stored");
     expect(await say(technician, entry({ kind: "started" }, 3))).toContain("start nothing by it");

@@ -8,7 +8,7 @@ import { FloorHead } from "./FloorHead.tsx";
  * Finds a lot by its name, typed or read by a hand-held scanner, which types and presses enter: the field has the focus, and a name that
  * is a lot's opens it at once.
  */
-export function FloorFind({ found, person }: { found: FoundLots; person: string }) {
+export function FloorFind({ found, person, waiting }: { found: FoundLots; person: string; waiting: number }) {
   const id = useId();
   const { query, rows, mine } = found;
   return (
@@ -39,6 +39,9 @@ export function FloorFind({ found, person }: { found: FoundLots; person: string 
           </button>
         </Form>
         <CameraFinder />
+        <a href="/floor/hand-overs" className="btn mt-4 min-h-27 w-full text-figure">
+          Hand-overs{waiting > 0 && `, ${waiting} to take`}
+        </a>
         {query !== "" &&
           (rows.length === 0 ? (
             <p role="status" className="mt-6 text-lead">

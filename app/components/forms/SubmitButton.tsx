@@ -9,13 +9,20 @@ interface Props {
   form?: string;
   /** takes something away: not the filled one */
   removes?: boolean;
+  /** its size, where hands in gloves press it */
+  className?: string;
 }
 
 /** The one filled button of a form. It keeps its place while the form is on its way. */
-export function SubmitButton({ children, busy, form, removes = false }: Props) {
+export function SubmitButton({ children, busy, form, removes = false, className = "" }: Props) {
   const waiting = useNavigation().state === "submitting";
   return (
-    <button type="submit" form={form} className={removes ? "btn btn-remove" : "btn btn-primary"} disabled={waiting}>
+    <button
+      type="submit"
+      form={form}
+      className={`btn ${removes ? "btn-remove" : "btn-primary"} ${className}`}
+      disabled={waiting}
+    >
       {waiting ? busy : children}
     </button>
   );

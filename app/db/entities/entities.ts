@@ -59,6 +59,7 @@ import { StepStop } from "./step-stop.ts";
 import { Incident } from "./incident.ts";
 import { IncidentNote } from "./incident-note.ts";
 import { IncidentPhoto } from "./incident-photo.ts";
+import { HandOver } from "./hand-over.ts";
 
 /** Every entity, listed by hand: the ORM finds nothing by itself. */
 export const entities = [
@@ -96,6 +97,7 @@ export const entities = [
   Incident,
   IncidentNote,
   IncidentPhoto,
+  HandOver,
   ImportProfile,
   RepeatabilityStudy,
   ReferenceWafer,

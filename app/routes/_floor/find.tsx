@@ -2,6 +2,7 @@ import { redirect } from "react-router";
 import { FloorFind } from "#app/components/floor/FloorFind.tsx";
 import { statusPathIn } from "#app/lib/status-path.ts";
 import { scopeOf } from "#app/server/contexts.server.ts";
+import { handOversToTake } from "#app/services/floor/hand-over.server.ts";
 import { findLots } from "#app/services/floor/find-lot.server.ts";
 import type { Route } from "./+types/find";
 
@@ -15,7 +16,7 @@ export async function loader({ context, url }: Route.LoaderArgs) {
   if (sheet !== null) throw redirect(sheet);
   const found = await findLots(scope, typed);
   if (found.exact !== null) throw redirect(`/floor/lots/${found.exact}`);
-  return { found, person: scope.actor.name };
+  return { found, person: scope.actor.name, waiting: await handOversToTake(scope) };
 }
 
 export default function Find({ loaderData }: Route.ComponentProps) {

@@ -6,6 +6,7 @@ export interface DemoKind {
     | DemoTable
     | "delegation"
     | "film_stress_value"
+    | "hand_over"
     | "incident"
     | "lot_hold"
     | "sheet_revision"
@@ -81,6 +82,7 @@ export const DEMO_KINDS: readonly DemoKind[] = [
     by: "x.opened_by_id",
     at: "x.opened_at",
   }),
+  ofProgram("hand_over", "hand-over", "x.place", { by: "x.given_by_id", at: "x.given_at" }),
   ofProgram("incident", "incident", "x.kind || ', ' || x.step_title"),
   ofProgram("scan", "scan", "x.label"),
   ofProgram("scan_file", "raw file", "x.name"),

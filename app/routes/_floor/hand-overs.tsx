@@ -1,0 +1,21 @@
+import { HandOverList } from "#app/components/floor/HandOverList.tsx";
+import { scopeOf } from "#app/server/contexts.server.ts";
+import { handOvers } from "#app/services/floor/hand-over.server.ts";
+import type { Route } from "./+types/hand-overs";
+
+export const meta: Route.MetaFunction = () => [{ title: "Hand-overs · Floor · Planeward" }];
+
+export async function loader({ context, url }: Route.LoaderArgs) {
+  const scope = scopeOf(context);
+  const query = (url.searchParams.get("place") ?? "").trim().slice(0, 80);
+  return {
+    query,
+    rows: await handOvers(scope, query),
+    given: url.searchParams.get("done") === "given",
+    person: scope.actor.name,
+  };
+}
+
+export default function HandOvers({ loaderData }: Route.ComponentProps) {
+  return <HandOverList {...loaderData} />;
+}

@@ -1,0 +1,156 @@
+import { randomUUID } from "node:crypto";
+import { LockMode, type EntityManager } from "@mikro-orm/postgresql";
+import { HandOver } from "#app/db/entities/hand-over.ts";
+import { mayInProgram, programsWhere } from "#app/policies/permissions.ts";
+import type { GiveForm, HandOverLot, HandOverRow, HandOverView } from "#app/schemas/hand-over.ts";
+import { notFound, problem } from "#app/server/problem.server.ts";
+import { inScope, type ActorScope } from "#app/server/scope.server.ts";
+import { everyWord } from "../like.server.ts";
+import { requireInProgram, requireInSomeProgram } from "../permission.server.ts";
+import { idFrom } from "../uuid.server.ts";
+import { lotStanding } from "./hand-over-lot.server.ts";
+import { findFloorLot } from "./lot-sheet.server.ts";
+
+const FLOOR = "work on the floor";
+const POPULATE = { populate: ["program", "givenBy", "takenBy"] as const };
+
+/** How many are listed; older ones are found by their place. */
+const LISTED = 100;
+
+/** The hand-overs of the programs on whose floor the person works, newest first. @param place words of a place's name */
+export async function handOvers(scope: ActorScope, place: string): Promise<HandOverRow[]> {
+  requireInSomeProgram(scope, FLOOR);
+  return inScope(scope, async (em) => {
+    const found = await em.find(
+      HandOver,
+      {
+        program: { $in: programsWhere(scope.actor, FLOOR).map(({ programId }) => programId) },
+        ...everyWord(place, (pattern) => ({ place: pattern })),
+      },
+      { ...POPULATE, orderBy: { givenAt: "desc", id: "asc" }, limit: LISTED },
+    );
+    const rows: HandOverRow[] = [];
+    for (const each of found) rows.push(await rowOf(em, scope, each));
+    return rows;
+  });
+}
+
+/** How many wait for this person to take them, of the last ones. */
+export async function handOversToTake(scope: ActorScope): Promise<number> {
+  return (await handOvers(scope, "")).filter(({ taken, replaced, own }) => taken === null && !replaced && !own).length;
+}
+
+type Found = NonNullable<Awaited<ReturnType<typeof findHandOver>>>;
+
+function findHandOver(em: EntityManager, id: string | undefined) {
+  return em.findOne(HandOver, { id: idFrom(id, "hand-over") }, POPULATE);
+}
+
+async function rowOf(em: EntityManager, { actor }: ActorScope, each: Found): Promise<HandOverRow> {
+  const { id, program, place, lots, givenBy, givenAt, takenBy, takenAt } = each;
+  return {
+    id,
+    program: program.name,
+    place,
+    lots: lots.length,
+    by: givenBy.name,
+    at: givenAt.toISOString(),
+    taken: takenBy && takenAt ? { by: takenBy.name, at: takenAt.toISOString() } : null,
+    replaced: takenAt === null && (await isReplaced(em, each)),
+    own: givenBy.id === actor.id,
+  };
+}
+
+/** Whether the same place has been handed over again since. */
+async function isReplaced(em: EntityManager, { program, place, givenAt }: Found): Promise<boolean> {
+  return (await em.count(HandOver, { program: program.id, place, givenAt: { $gt: givenAt } })) > 0;
+}
+
+/** One hand-over as it was given, and which of its lots stand otherwise by now. @throws 404 for one that is not there or of another program */
+export async function handOver(scope: ActorScope, id: string | undefined): Promise<HandOverView> {
+  return inScope(scope, async (em) => {
+    const found = await findHandOver(em, id);
+    if (!found) throw notFound("hand-over");
+    requireInProgram(scope, FLOOR, found.program.id, "hand-over");
+    const row = await rowOf(em, scope, found);
+    const moved: string[] = [];
+    // What is taken over belongs to the next shift; where its lots went then is theirs to hand over.
+    if (row.taken === null)
+      for (const lot of found.lots) if (await hasMoved(em, scope, lot, found.givenAt)) moved.push(lot.name);
+    return {
+      ...row,
+      remark: found.remark,
+      takenRemark: found.takenRemark ?? "",
+      content: found.lots,
+      moved,
+      mayTake: row.taken === null && !row.replaced && !row.own,
+    };
+  });
+}
+
+async function hasMoved(em: EntityManager, scope: ActorScope, was: HandOverLot, given: Date): Promise<boolean> {
+  const now = await lotStanding(em, scope, await findFloorLot(em, scope, was.id), new Date());
+  // What was odd is of the hours before: it goes by itself, and what is new has come since.
+  const told = new Set(was.odd);
+  const said = (lot: Pick<HandOverLot, "sheet" | "at" | "blocks" | "wafers">) =>
+    JSON.stringify([lot.sheet, lot.at, [...lot.blocks].sort(), lot.wafers.total, lot.wafers.inLine]);
+  return said(now) !== said(was) || (new Date() > given && now.odd.some((each) => !told.has(each)));
+}
+
+/**
+ * Hands a place over: of each program one record of its lots there, as they stand now. Sent again, it counts once.
+ * @throws 404 for a lot that is not there or of another program, 403 for a role that may not
+ */
+export async function giveOver(scope: ActorScope, { given, place, remark, lots }: GiveForm): Promise<void> {
+  requireInSomeProgram(scope, FLOOR);
+  await inScope(scope, async (em) => {
+    if (await em.findOne(HandOver, { given })) return;
+    const now = new Date();
+    const programs = new Map<string, HandOverLot[]>();
+    for (const { lot: id, on, remark: said } of lots) {
+      if (id === undefined) continue;
+      const lot = await findFloorLot(em, scope, id);
+      const there = { ...(await lotStanding(em, scope, lot, now)), on, remark: said };
+      programs.set(lot.program.id, [...(programs.get(lot.program.id) ?? []), there]);
+    }
+    for (const [program, content] of programs)
+      em.create(HandOver, {
+        id: randomUUID(),
+        program,
+        given,
+        place,
+        remark,
+        lots: content,
+        givenAt: now,
+        givenBy: scope.actor.id,
+        takenAt: null,
+        takenBy: null,
+        takenRemark: null,
+      });
+    await em.flush();
+  });
+}
+
+/**
+ * Takes a place over: whoever does answers for its lots from then on.
+ * @throws 404 for one that is not there, 403 for one's own, 409 for one that was taken or given anew
+ */
+export async function takeOver(scope: ActorScope, id: string | undefined, remark: string): Promise<void> {
+  await inScope(scope, async (em) => {
+    const found = await findHandOver(em, id);
+    if (!found || !mayInProgram(scope.actor, FLOOR, found.program.id)) throw notFound("hand-over");
+    if (found.givenBy.id === scope.actor.id)
+      throw problem(403, "You gave this hand-over. Somebody of the next shift takes it.");
+    await em.lock(found, LockMode.PESSIMISTIC_WRITE);
+    await em.refresh(found, POPULATE);
+    if (found.takenAt) {
+      // Sent again by whoever took it, it counts once.
+      if (found.takenBy?.id === scope.actor.id) return;
+      throw problem(409, `${found.takenBy?.name ?? "Somebody"} has taken this over already. Ask them.`);
+    }
+    if (await isReplaced(em, found))
+      throw problem(409, `${found.place} was handed over again since. Open the newest one, and take that.`);
+    Object.assign(found, { takenAt: new Date(), takenBy: scope.actor.id, takenRemark: remark });
+    await em.flush();
+  });
+}
