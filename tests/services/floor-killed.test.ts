@@ -4,7 +4,17 @@ import type { ActorScope } from "#app/server/scope.server.ts";
 import { scopeOfPerson } from "#tests/db/people.ts";
 import { asOwner, useDatabase } from "#tests/db/test-database.ts";
 import type { FloorDeed } from "./deed-in-process.ts";
-import { useDeeds } from "./killed-deed.ts";
+import { useDeeds, type WrittenTable } from "./killed-deed.ts";
+import { newLot, releaseFirstFlow } from "./lot-on-sheet.ts";
+
+/** What each deed writes last. */
+const LAST_WRITTEN: Record<FloorDeed["kind"], WrittenTable> = {
+  assign: "lot_sheet",
+  enter: "floor_entry",
+  stop: "mail_outbox",
+  hold: "mail_outbox",
+  clear: "step_stop",
+};
 
 const database = useDatabase({ demo: true });
 const { done, killedBeforeItsEnd } = useDeeds(database);
@@ -17,31 +27,6 @@ beforeAll(async () => {
   engineer = await scopeOfPerson(database, "engineer");
   owner = await scopeOfPerson(database, "process-owner");
 }, 90_000);
-
-async function releasedRevision(): Promise<string> {
-  const { runAssessment } = await import("#app/services/assessments/assessments.server.ts");
-  const [flow] = await asOwner<{ id: string }>(
-    database,
-    "select f.id from flow f join program p on p.id = f.program_id where p.slug = 'tern' order by f.name limit 1",
-  );
-  const ran = await runAssessment(engineer, flow?.id ?? "");
-  if (ran.outcome !== "stored") throw new Error(ran.outcome);
-  await done({ kind: "ask", scope: engineer, id: ran.id });
-  const [row] = await asOwner<{ id: string }>(database, "select id from sheet_revision order by asked_at desc limit 1");
-  await done({ kind: "release", scope: owner, id: row?.id ?? "" });
-  return row?.id ?? "";
-}
-
-async function newLot(): Promise<string> {
-  const id = randomUUID();
-  await asOwner(
-    database,
-    `insert into lot (id, program_id, name, note, created_at, created_by_id)
-       select ?, program.id, 'K-1', '', now(), ? from program where slug = 'tern'`,
-    [id, engineer.actor.id],
-  );
-  return id;
-}
 
 /** Everything that a deed on a lot leaves behind. */
 async function traces() {
@@ -64,7 +49,7 @@ const twice = () =>
 async function killedThenDone(deed: FloorDeed, adds: Partial<Awaited<ReturnType<typeof traces>>>): Promise<void> {
   const before = await traces();
   const tells = deed.kind === "hold" || deed.kind === "stop";
-  await killedBeforeItsEnd(deed, tells ? "mail_outbox" : "audit_event");
+  await killedBeforeItsEnd(deed, LAST_WRITTEN[deed.kind]);
   expect(await traces()).toEqual(before);
   await done(deed);
   const after = await traces();
@@ -82,18 +67,22 @@ test(
   "whoever is killed while putting a lot on a sheet, entering, holding, stopping or clearing has done nothing",
   { timeout: 240_000 },
   async () => {
-    const [id, revision] = [await newLot(), await releasedRevision()];
+    const revision = await releaseFirstFlow(database, "tern");
+    const id = await newLot(database, "K-1", "tern");
     await killedThenDone(
       { kind: "assign", scope: engineer, id, form: { revision, fromStep: 1, reason: "" } },
       { pins: 1 },
     );
-    const enter = (form: { kind: "acknowledged" | "started"; step: number | null }) =>
+    const enter = (
+      form: { kind: "acknowledged"; step: null } | { kind: "started"; step: 1 } | { kind: "done"; step: 1; count: 24 },
+    ) =>
       killedThenDone(
         { kind: "enter", scope: engineer, id, form: { id: randomUUID(), revision, leg: 0, at: null, ...form } },
         { entries: 1 },
       );
     await enter({ kind: "acknowledged", step: null });
     await enter({ kind: "started", step: 1 });
+    await enter({ kind: "done", step: 1, count: 24 });
     const stop = randomUUID();
     const cause = "tool trouble";
     await killedThenDone(

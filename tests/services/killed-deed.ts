@@ -7,6 +7,8 @@ import type { Deed } from "./deed-in-process.ts";
 
 const root = fileURLToPath(new URL("../..", import.meta.url));
 
+export type WrittenTable = "floor_entry" | "lot_sheet" | "mail_outbox" | "step_stop";
+
 /** Deeds in processes of their own: one that is killed before its end, and one that is done. */
 export function useDeeds(database: TestDatabase) {
   const started: ChildProcess[] = [];
@@ -29,12 +31,12 @@ export function useDeeds(database: TestDatabase) {
   }
 
   /** Does the deed in a process that is killed when it comes to write into a table, mail unless another is named, then waits until the database knows. */
-  async function killedBeforeItsEnd(deed: Deed, table: "audit_event" | "mail_outbox" = "mail_outbox"): Promise<void> {
+  async function killedBeforeItsEnd(deed: Deed, table: WrittenTable = "mail_outbox"): Promise<void> {
     const em = database.owner.em.fork();
     await em.transactional(async (held) => {
       await held
         .getConnection()
-        .execute(`lock table ${table} in access exclusive mode`, [], "run", held.getTransactionContext());
+        .execute(`lock table ${table} in exclusive mode`, [], "run", held.getTransactionContext());
       const child = start(deed);
       await expect
         .poll(
