@@ -359,8 +359,11 @@ test.describe("of two who change one stack", () => {
     await third.context().close();
     await save(page).click();
     await expect(alert.getByRole("row", { name: /^Name/ })).toContainText("they did");
+    // The conflict goes from the screen before the save is sent.
+    const saved = page.waitForResponse((answer) => answer.request().method() === "POST");
     await merge.click();
     await expect(alert).toHaveCount(0);
+    expect((await saved).status()).toBeLessThan(400);
     await expect(page.getByText(/Last changed .*Ines Varga/)).toBeVisible();
     await page.reload();
     await expect(field(page, "siliconThickness.value")).toHaveValue("550 µm");
