@@ -5,6 +5,7 @@ import type { ActorScope } from "#app/server/scope.server.ts";
 import type { UploadedFile } from "#app/server/upload.server.ts";
 import { leave, scopeOfPerson } from "#tests/db/people.ts";
 import { asOwner, useDatabase } from "#tests/db/test-database.ts";
+import { assessFirstFlow } from "./lot-on-sheet.ts";
 
 const database = useDatabase({ demo: true });
 
@@ -32,22 +33,9 @@ beforeAll(async () => {
   lead = await scopeOfPerson(database, "shift-lead");
   guest = await scopeOfPerson(database, "guest");
   administrator = await scopeOfPerson(database, "administrator");
-  tern = await assess("tern");
-  petrel = await assess("petrel");
+  tern = await assessFirstFlow(database, "tern");
+  petrel = await assessFirstFlow(database, "petrel");
 }, 90_000);
-
-/** Assesses the first flow of a program as it is now. */
-async function assess(slug: string): Promise<string> {
-  const { runAssessment } = await import("#app/services/assessments/assessments.server.ts");
-  const [flow] = await asOwner<{ id: string }>(
-    database,
-    "select f.id from flow f join program p on p.id = f.program_id where p.slug = ? order by f.name limit 1",
-    [slug],
-  );
-  const ran = await runAssessment(engineer, flow?.id ?? "");
-  if (ran.outcome !== "stored") throw new Error(ran.outcome);
-  return ran.id;
-}
 
 /** A report as the form sends it. */
 function report(changed: Record<string, unknown> = {}): IncidentValues {

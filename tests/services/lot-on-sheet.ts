@@ -4,22 +4,28 @@ import { asOwner, type useDatabase } from "#tests/db/test-database.ts";
 
 type Database = ReturnType<typeof useDatabase>;
 
-/** Assesses the first flow of a program, has it reviewed and releases it. @returns id of the revision */
-export async function releaseFirstFlow(database: Database, slug: string): Promise<string> {
+/** Assesses the first flow of a program as it is now. @returns id of the assessment */
+export async function assessFirstFlow(database: Database, slug: string): Promise<string> {
   const { runAssessment } = await import("#app/services/assessments/assessments.server.ts");
-  const { askReview } = await import("#app/services/sheets/ask-review.server.ts");
-  const { reviewPage } = await import("#app/services/sheets/review-page.server.ts");
-  const { releaseRevision } = await import("#app/services/sheets/release.server.ts");
-  const engineer = await scopeOfPerson(database, "engineer");
   const [flow] = await asOwner<{ id: string }>(
     database,
     "select f.id from flow f join program p on p.id = f.program_id where p.slug = ? order by f.name limit 1",
     [slug],
   );
-  const ran = await runAssessment(engineer, flow?.id ?? "");
+  const ran = await runAssessment(await scopeOfPerson(database, "engineer"), flow?.id ?? "");
   if (ran.outcome !== "stored") throw new Error(ran.outcome);
-  await askReview(engineer, ran.id, "");
-  const id = (await reviewPage(engineer, ran.id)).revision?.id ?? "";
+  return ran.id;
+}
+
+/** Assesses the first flow of a program, has it reviewed and releases it. @returns id of the revision */
+export async function releaseFirstFlow(database: Database, slug: string): Promise<string> {
+  const { askReview } = await import("#app/services/sheets/ask-review.server.ts");
+  const { reviewPage } = await import("#app/services/sheets/review-page.server.ts");
+  const { releaseRevision } = await import("#app/services/sheets/release.server.ts");
+  const engineer = await scopeOfPerson(database, "engineer");
+  const assessment = await assessFirstFlow(database, slug);
+  await askReview(engineer, assessment, "");
+  const id = (await reviewPage(engineer, assessment)).revision?.id ?? "";
   await releaseRevision(await scopeOfPerson(database, "process-owner"), id, "", "https://planeward.site.example");
   return id;
 }

@@ -3,6 +3,7 @@ import { refusedSentence } from "#app/server/problem.server.ts";
 import type { ActorScope } from "#app/server/scope.server.ts";
 import { scopeOfPerson } from "#tests/db/people.ts";
 import { asOwner, useDatabase } from "#tests/db/test-database.ts";
+import { assessFirstFlow } from "./lot-on-sheet.ts";
 
 const database = useDatabase({ demo: true });
 
@@ -56,23 +57,10 @@ beforeAll(async () => {
   guest = await scopeOfPerson(database, "guest");
 }, 90_000);
 
-/** Assesses the first flow of a program as it is now. */
-async function assess(slug: string): Promise<string> {
-  const { runAssessment } = await assessments();
-  const [flow] = await asOwner<{ id: string }>(
-    database,
-    "select f.id from flow f join program p on p.id = f.program_id where p.slug = ? order by f.name limit 1",
-    [slug],
-  );
-  const ran = await runAssessment(engineer, flow?.id ?? "");
-  if (ran.outcome !== "stored") throw new Error(ran.outcome);
-  return ran.id;
-}
-
 async function inReview(slug: string): Promise<{ assessment: string; revision: string }> {
   const { askReview } = await asking();
   const { reviewPage } = await pages();
-  const assessment = await assess(slug);
+  const assessment = await assessFirstFlow(database, slug);
   await askReview(engineer, assessment, "Lot of next week");
   const { revision } = await reviewPage(engineer, assessment);
   return { assessment, revision: revision?.id ?? "" };
@@ -239,7 +227,7 @@ test("one that is not the newest assessment of its flow is not released", LONG, 
   const { releaseRevision } = await releasing();
   const { returnRevision } = await deeds();
   const { revision } = await inReview("tern");
-  await assess("tern");
+  await assessFirstFlow(database, "tern");
   expect(await refused(releaseRevision(owner, revision, "", ORIGIN))).toContain("has been assessed again since");
   await returnRevision(owner, revision, { reason: "A newer one is there" });
 });

@@ -29,15 +29,26 @@ export async function handOvers(scope: ActorScope, place: string): Promise<HandO
       },
       { ...POPULATE, orderBy: { givenAt: "desc", id: "asc" }, limit: LISTED },
     );
-    const rows: HandOverRow[] = [];
-    for (const each of found) rows.push(await rowOf(em, scope, each));
-    return rows;
+    const replaced = await replacedAmong(em, found);
+    return found.map((each) => rowOf(scope, each, replaced));
   });
 }
 
-/** How many wait for this person to take them, of the last ones. */
+/** The same place has been handed over again since `h`. */
+const GIVEN_ANEW = `exists (select 1 from hand_over later where later.program_id = h.program_id and later.place = h.place and later.given_at > h.given_at)`;
+
+/** How many wait for this person to take them. */
 export async function handOversToTake(scope: ActorScope): Promise<number> {
-  return (await handOvers(scope, "")).filter(({ taken, replaced, own }) => taken === null && !replaced && !own).length;
+  requireInSomeProgram(scope, FLOOR);
+  const programs = programsWhere(scope.actor, FLOOR).map(({ programId }) => programId);
+  return inScope(scope, async (em) => {
+    const [row] = await em.execute<{ waiting: number }[]>(
+      `select count(*)::int as waiting from hand_over h
+        where h.program_id in (?) and h.taken_at is null and h.given_by_id <> ? and not ${GIVEN_ANEW}`,
+      [programs, scope.actor.id],
+    );
+    return row?.waiting ?? 0;
+  });
 }
 
 type Found = NonNullable<Awaited<ReturnType<typeof findHandOver>>>;
@@ -46,7 +57,7 @@ function findHandOver(em: EntityManager, id: string | undefined) {
   return em.findOne(HandOver, { id: idFrom(id, "hand-over") }, POPULATE);
 }
 
-async function rowOf(em: EntityManager, { actor }: ActorScope, each: Found): Promise<HandOverRow> {
+function rowOf({ actor }: ActorScope, each: Found, replacedIds: ReadonlySet<string>): HandOverRow {
   const { id, program, place, lots, givenBy, givenAt, takenBy, takenAt } = each;
   return {
     id,
@@ -56,14 +67,19 @@ async function rowOf(em: EntityManager, { actor }: ActorScope, each: Found): Pro
     by: givenBy.name,
     at: givenAt.toISOString(),
     taken: takenBy && takenAt ? { by: takenBy.name, at: takenAt.toISOString() } : null,
-    replaced: takenAt === null && (await isReplaced(em, each)),
+    replaced: takenAt === null && replacedIds.has(id),
     own: givenBy.id === actor.id,
   };
 }
 
-/** Whether the same place has been handed over again since. */
-async function isReplaced(em: EntityManager, { program, place, givenAt }: Found): Promise<boolean> {
-  return (await em.count(HandOver, { program: program.id, place, givenAt: { $gt: givenAt } })) > 0;
+/** The ids of those whose place has been handed over again since. */
+async function replacedAmong(em: EntityManager, found: readonly Found[]): Promise<ReadonlySet<string>> {
+  if (found.length === 0) return new Set();
+  const ids = found.map(({ id }) => id);
+  const rows = await em.execute<{ id: string }[]>(`select h.id from hand_over h where h.id in (?) and ${GIVEN_ANEW}`, [
+    ids,
+  ]);
+  return new Set(rows.map(({ id }) => id));
 }
 
 /** One hand-over as it was given, and which of its lots stand otherwise by now. @throws 404 for one that is not there or of another program */
@@ -72,11 +88,10 @@ export async function handOver(scope: ActorScope, id: string | undefined): Promi
     const found = await findHandOver(em, id);
     if (!found) throw notFound("hand-over");
     requireInProgram(scope, FLOOR, found.program.id, "hand-over");
-    const row = await rowOf(em, scope, found);
+    const row = rowOf(scope, found, await replacedAmong(em, [found]));
     const moved: string[] = [];
     // What is taken over belongs to the next shift; where its lots went then is theirs to hand over.
-    if (row.taken === null)
-      for (const lot of found.lots) if (await hasMoved(em, scope, lot, found.givenAt)) moved.push(lot.name);
+    if (row.taken === null) for (const lot of found.lots) if (await hasMoved(em, scope, lot)) moved.push(lot.name);
     return {
       ...row,
       remark: found.remark,
@@ -88,13 +103,13 @@ export async function handOver(scope: ActorScope, id: string | undefined): Promi
   });
 }
 
-async function hasMoved(em: EntityManager, scope: ActorScope, was: HandOverLot, given: Date): Promise<boolean> {
+async function hasMoved(em: EntityManager, scope: ActorScope, was: HandOverLot): Promise<boolean> {
   const now = await lotStanding(em, scope, await findFloorLot(em, scope, was.id), new Date());
   // What was odd is of the hours before: it goes by itself, and what is new has come since.
   const told = new Set(was.odd);
   const said = (lot: Pick<HandOverLot, "sheet" | "at" | "blocks" | "wafers">) =>
     JSON.stringify([lot.sheet, lot.at, [...lot.blocks].sort(), lot.wafers.total, lot.wafers.inLine]);
-  return said(now) !== said(was) || (new Date() > given && now.odd.some((each) => !told.has(each)));
+  return said(now) !== said(was) || now.odd.some((each) => !told.has(each));
 }
 
 /**
@@ -104,6 +119,8 @@ async function hasMoved(em: EntityManager, scope: ActorScope, was: HandOverLot, 
 export async function giveOver(scope: ActorScope, { given, place, remark, lots }: GiveForm): Promise<void> {
   requireInSomeProgram(scope, FLOOR);
   await inScope(scope, async (em) => {
+    // Of the same form sent twice at once the second waits, and then finds the first.
+    await em.execute("select pg_advisory_xact_lock(hashtextextended(?, 0))", [`hand-over ${given}`]);
     if (await em.findOne(HandOver, { given })) return;
     const now = new Date();
     const programs = new Map<string, HandOverLot[]>();
@@ -148,7 +165,7 @@ export async function takeOver(scope: ActorScope, id: string | undefined, remark
       if (found.takenBy?.id === scope.actor.id) return;
       throw problem(409, `${found.takenBy?.name ?? "Somebody"} has taken this over already. Ask them.`);
     }
-    if (await isReplaced(em, found))
+    if ((await replacedAmong(em, [found])).has(found.id))
       throw problem(409, `${found.place} was handed over again since. Open the newest one, and take that.`);
     Object.assign(found, { takenAt: new Date(), takenBy: scope.actor.id, takenRemark: remark });
     await em.flush();
