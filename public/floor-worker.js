@@ -23,13 +23,23 @@ self.addEventListener("fetch", (event) => {
 
 self.addEventListener("message", (event) => {
   if (Array.isArray(event.data?.keep)) event.waitUntil(keepAll(event.data.keep));
+  if (event.data?.forget === true) event.waitUntil(forget());
 });
 
+/** Counts how often all was taken away: what was on its way before that is not kept any more. */
+let forgotten = 0;
+
+async function forget() {
+  forgotten += 1;
+  for (const name of await caches.keys()) if (name.startsWith(PAGES)) await caches.delete(name);
+}
+
 async function page(event) {
+  const since = forgotten;
   const old = await kept(event.request.url);
   try {
     const answer = await (old ? Promise.race([fetch(event.request), tooLate()]) : fetch(event.request));
-    event.waitUntil(keep(event.request.url, answer.clone()));
+    event.waitUntil(keep(event.request.url, answer.clone(), since));
     return answer;
   } catch {
     return old ?? (await caches.match("/unreachable.html")) ?? Response.error();
@@ -51,7 +61,7 @@ async function asset(request) {
 }
 
 /** Keeps a page of a lot, with the files that it names, for the person whom it was made for. */
-async function keep(url, answer) {
+async function keep(url, answer, since = forgotten) {
   if (!answer.ok || answer.redirected) return;
   const text = await answer.text();
   const person = /data-floor-person="([0-9a-f-]{36})"/.exec(text)?.[1];
@@ -62,7 +72,9 @@ async function keep(url, answer) {
   headers.set("Kept-At", new Date().toISOString());
   headers.delete("Content-Encoding");
   headers.delete("Content-Length");
+  if (since !== forgotten) return;
   await (await caches.open(PAGES + person)).put(url, new Response(text, { headers }));
+  if (since !== forgotten) await caches.delete(PAGES + person);
   const files = [...new Set(text.match(/\/assets\/[\w.-]+\.(?:js|css|woff2)/g) ?? [])];
   await Promise.all(files.map((file) => asset(new Request(new URL(file, location.origin))).catch(() => undefined)));
 }
@@ -87,13 +99,15 @@ async function kept(url) {
 
 /** Keeps pages that were not opened yet: the steps of a lot that somebody is about to work on. One after the other, to be no burden. */
 async function keepAll(paths) {
+  const since = forgotten;
   for (const path of paths) {
     const url = new URL(path, location.origin).href;
     const old = await kept(url);
     const at = old?.headers.get("Kept-At");
     if (at && Date.now() - Date.parse(at) < 60_000) continue;
     try {
-      await keep(url, await fetch(url, { credentials: "same-origin" }));
+      if (since !== forgotten) return;
+      await keep(url, await fetch(url, { credentials: "same-origin" }), since);
     } catch {
       return;
     }
