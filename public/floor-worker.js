@@ -1,9 +1,10 @@
 /*
- * Keeps the sheets of the floor that were opened last, so that they can be read through a lost connection. Every page that can be
+ * Keeps the pages of the floor that were opened last, so that they can be read through a lost connection. Every page that can be
  * fetched is fetched; what is kept says when it was fetched, belongs to one person, and goes after twelve hours or when somebody else
  * comes. Signing out takes all of it away.
  */
 const PAGES = "floor-pages-";
+const FIND = "/floor";
 const ASSETS = "floor-assets-1";
 const KEPT_FOR = 12 * 3600 * 1000;
 /** A kept page is better than one that may never come. */
@@ -42,8 +43,15 @@ async function page(event) {
     event.waitUntil(keep(event.request.url, answer.clone(), since));
     return answer;
   } catch {
-    return old ?? (await caches.match("/unreachable.html")) ?? Response.error();
+    return old ?? (await toFind(event.request.url)) ?? (await caches.match("/unreachable.html")) ?? Response.error();
   }
+}
+
+/** Whoever looks for a lot without a connection is led to the lots that were theirs last; null for every other page. */
+async function toFind(url) {
+  const { pathname, search } = new URL(url);
+  if (pathname !== FIND || search === "") return null;
+  return (await kept(new URL(FIND, location.origin).href)) && Response.redirect(FIND);
 }
 
 const tooLate = () => new Promise((_, reject) => setTimeout(reject, PATIENCE));

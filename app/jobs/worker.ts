@@ -13,6 +13,7 @@ import { queueLostMail } from "#app/services/mail/lost-mail.server.ts";
 import { makeDigests } from "#app/services/mail/make-digests.server.ts";
 import { MAIL_TASK } from "#app/services/mail/queue-mail.server.ts";
 import { sendMail } from "#app/services/mail/send-mail.server.ts";
+import { forgetOldPrints } from "#app/services/sheets/print-retention.server.ts";
 
 /** How often the jobs of workers that were killed are looked for, milliseconds. */
 const LOOK_AGAIN = 10_000;
@@ -68,11 +69,13 @@ const mail = await worker({
       options: { backfillPeriod: LATEST_DIGEST },
     },
     { task: "out of date", match: "*/5 * * * *" },
+    { task: "old prints", match: "30 3 * * *" },
   ]),
   taskList: {
     [MAIL_TASK]: (payload) => sendMail(payload, transport),
     digests: () => makeDigests(new Date().toISOString().slice(0, 10)),
     "out of date": () => announceOutOfDate(),
+    "old prints": async () => void (await forgetOldPrints()),
   },
 });
 if (!transport) log.warn("no mail server is named by SMTP_URL, so mail waits in the outbox");

@@ -210,7 +210,10 @@ test.describe("through a lost connection", () => {
     await page.goto(lot);
     await page.getByRole("button", { name: /^I have read/ }).click();
     await expect(page.getByRole("link", { name: /^Go to step 1,/ })).toBeVisible();
-    // Every step of the lot is kept, though none was opened, and the forms of the first two.
+    await page.goto("/floor");
+    await expect(page.getByText("No connection.")).toBeHidden();
+    await page.getByRole("link", { name }).click();
+    // Every step of the lot is kept, though none was opened, the forms of the first two, where lots are found, and hand-overs.
     await expect
       .poll(
         () =>
@@ -220,9 +223,17 @@ test.describe("through a lost connection", () => {
           }),
         { timeout: 60_000 },
       )
-      .toBe(30);
+      .toBe(32);
 
     await context.setOffline(true);
+    await page.goto("/floor/hand-overs");
+    await expect(page.getByText("No connection.")).toBeVisible();
+    await expect(page.getByRole("link", { name: "Hand a place over" })).toBeHidden();
+    await page.goto(`/floor?lot=${name}`);
+    await expect(page).toHaveURL("/floor");
+    await expect(page.getByText("Only lots that were opened on this device")).toBeVisible();
+    await page.getByRole("link", { name }).click();
+    await expect(page.getByRole("heading", { level: 1, name: `Lot ${name}` })).toBeVisible();
     await page.goto(`${lot}/steps/1`);
     await expect(
       page.getByText("No connection: whether this sheet is still current could not be checked"),
