@@ -45,6 +45,7 @@ export function HandOverPage({ handOver, person, now, lastResult }: Props) {
             <LeftLot key={lot.id} lot={lot} now={now} moved={moved.includes(lot.name)} />
           ))}
         </ul>
+        {!taken && <p className="mt-10 hidden text-lead print:block">Taken over by, day and time in UTC:</p>}
         {mayTake && (
           <div className="fresh-only">
             <TakeOver lastResult={lastResult} />
