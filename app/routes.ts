@@ -151,6 +151,11 @@ export default [
     ]),
     route("demo", "routes/_app/demo.tsx"),
     route("settings", "routes/_app/settings.tsx"),
+    ...prefix("audit", [
+      index("routes/_app/audit/list.tsx"),
+      route("trail.csv", "routes/_app/audit/csv.ts"),
+      route("seals", "routes/_app/audit/seals.tsx"),
+    ]),
     route("delegates", "routes/_app/delegates.tsx"),
     route("preferences", "routes/_app/preferences.tsx"),
     route("preferences/mail", "routes/_app/mail/choices.tsx"),

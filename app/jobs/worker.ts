@@ -6,6 +6,7 @@ import { configuredTransport } from "#app/integrations/mail/configured.server.ts
 import { environment } from "#app/server/environment.server.ts";
 import { log } from "#app/server/log.server.ts";
 import { announceOutOfDate } from "#app/services/assessments/announce-out-of-date.server.ts";
+import { sealAudit } from "#app/services/audit/seal.server.ts";
 import { JOB_TASK } from "#app/services/jobs/enqueue.server.ts";
 import { freeLostJobs } from "#app/services/jobs/lost-jobs.server.ts";
 import { runJob } from "#app/services/jobs/run-job.server.ts";
@@ -70,11 +71,13 @@ const mail = await worker({
     },
     { task: "out of date", match: "*/5 * * * *" },
     { task: "old prints", match: "30 3 * * *" },
+    { task: "seals", match: "* * * * *" },
   ]),
   taskList: {
     [MAIL_TASK]: (payload) => sendMail(payload, transport),
     digests: () => makeDigests(new Date().toISOString().slice(0, 10)),
     "out of date": () => announceOutOfDate(),
+    seals: async () => void (await sealAudit()),
     "old prints": async () => void (await forgetOldPrints()),
   },
 });

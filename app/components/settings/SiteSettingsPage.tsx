@@ -1,4 +1,4 @@
-import { Form } from "react-router";
+import { Form, Link } from "react-router";
 import { Choices } from "#app/components/forms/Choices.tsx";
 import { SubmitButton } from "#app/components/forms/SubmitButton.tsx";
 import { PageHead } from "#app/components/layout/PageHead.tsx";
@@ -24,7 +24,15 @@ export function SiteSettingsPage({ paper, stamp, retention, saved, refused }: Pr
   const { version, updatedAt, updatedBy } = stamp;
   return (
     <>
-      <PageHead title="Site settings" remark="For everybody on this site" />
+      <PageHead
+        title="Site settings"
+        remark="For everybody on this site"
+        actions={
+          <Link to="/audit" className="btn">
+            Audit trail
+          </Link>
+        }
+      />
       {refused && (
         <Notice kind="error" title="Not saved: somebody else saved first">
           {refused.reason}

@@ -1,5 +1,6 @@
 import { Assessment } from "./assessment.ts";
 import { AuditEvent } from "./audit-event.ts";
+import { AuditSeal } from "./audit-seal.ts";
 import { BondingMaterial } from "./bonding-material.ts";
 import { Carrier } from "./carrier.ts";
 import { CarrierUnit } from "./carrier-unit.ts";
@@ -125,4 +126,5 @@ export const entities = [
   MailChoice,
   DemoRecord,
   AuditEvent,
+  AuditSeal,
 ];

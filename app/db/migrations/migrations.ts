@@ -27,6 +27,7 @@ import { LotsAndFloor } from "./2026-12-13-lots-and-floor.ts";
 import { Incidents } from "./2026-12-14-incidents.ts";
 import { HandOvers } from "./2026-12-15-hand-over.ts";
 import { PrintRetention } from "./2026-12-18-print-retention.ts";
+import { AuditSeal } from "./2026-12-19-audit-seal.ts";
 
 /** Every migration in the order in which it runs. */
 export const migrations = [
@@ -59,4 +60,5 @@ export const migrations = [
   { name: "2026-12-14-incidents", class: Incidents },
   { name: "2026-12-15-hand-over", class: HandOvers },
   { name: "2026-12-18-print-retention", class: PrintRetention },
+  { name: "2026-12-19-audit-seal", class: AuditSeal },
 ];
