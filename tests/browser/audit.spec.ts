@@ -8,8 +8,8 @@ test("an administrator finds what changed, follows one object, saves a table and
   await page.getByRole("link", { name: "Audit trail" }).click();
   await expect(page.getByRole("heading", { level: 1, name: "Audit trail" })).toBeVisible();
   await expectNoAxeFindings(page);
-  await page.getByLabel("Kind").selectOption("film");
-  await page.getByLabel("Done").selectOption("created");
+  await page.getByLabel("Kind", { exact: true }).selectOption("film");
+  await page.getByLabel("Done", { exact: true }).selectOption("created");
   await page.getByRole("button", { name: "Show" }).click();
   await expect(page).toHaveURL(/subject=film/);
   await expect(page.getByText(/^\d+ events found$/)).toBeVisible();
