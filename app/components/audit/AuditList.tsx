@@ -5,6 +5,7 @@ import { DataTable, type Column } from "#app/components/ui/DataTable.tsx";
 import { EmptyState } from "#app/components/ui/EmptyState.tsx";
 import { ListHead } from "#app/components/ui/ListHead.tsx";
 import type { Option } from "#app/components/ui/SelectField.tsx";
+import { auditValue } from "#app/lib/audit-value.ts";
 import type { ListPage } from "#app/lib/list-params.ts";
 import { minuteOf } from "#app/lib/minute-of.ts";
 import { AUDIT_ACTIONS, type AuditRow } from "#app/schemas/audit.ts";
@@ -14,7 +15,7 @@ const columns: Column<AuditRow>[] = [
     key: "at",
     head: "When",
     sortable: true,
-    cell: ({ at }) => <span className="whitespace-nowrap">{minuteOf(at)}</span>,
+    cell: ({ at }) => minuteOf(at),
   },
   { key: "who", head: "Who", cell: ({ actor }) => actor ?? <span className="text-quiet">nobody signed in</span> },
   { key: "what", head: "What", cell: ({ action, subject, field }) => <What {...{ action, subject, field }} /> },
@@ -107,7 +108,7 @@ const SHORT = 60;
 
 function Value({ json }: { json: string | null }) {
   if (json === null) return <span className="text-quiet">–</span>;
-  const text = json.startsWith('"') ? String(JSON.parse(json)) : json;
+  const text = auditValue(json);
   if (text.length <= SHORT) return <span className="wrap-anywhere">{text}</span>;
   return (
     <details>
