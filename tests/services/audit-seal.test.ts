@@ -1,3 +1,4 @@
+import { spawnSync } from "node:child_process";
 import { beforeAll, expect, test } from "vitest";
 import { readListParams } from "#app/lib/list-params.ts";
 import type { ActorScope } from "#app/server/scope.server.ts";
@@ -93,7 +94,15 @@ test("the list is found by program, kind, day, person and whole id, and only by 
   }
 });
 
-test("what was changed, taken out or slipped in past every rule shows", async () => {
+function command(): { status: number | null; told: string } {
+  const { status, stdout } = spawnSync(process.execPath, ["app/cli/audit.mjs"], {
+    encoding: "utf8",
+    env: { ...process.env, DATABASE_URL: database.appUrl, DATABASE_OWNER_URL: database.ownerUrl },
+  });
+  return { status, told: stdout };
+}
+
+test("what was changed, taken out or slipped in past every rule shows", { timeout: 60_000 }, async () => {
   const { sealAudit, auditState } = await seals();
   await sealAudit();
   const sealed = await asOwner<{ id: string; number: number }>(
@@ -107,8 +116,13 @@ test("what was changed, taken out or slipped in past every rule shows", async ()
   expect(await faults()).toEqual([
     { program: "Tern", number: 1, eventId: first?.id, fault: "it, or what was before it, has been changed" },
   ]);
+  expect(command()).toMatchObject({
+    status: 1,
+    told: expect.stringContaining("The trail does not agree with its seals in one place.") as unknown,
+  });
   await tamper(`update audit_event set "to" = $$${was?.to ?? ""}$$ where id = '${first?.id ?? ""}'`);
   expect(await faults()).toEqual([]);
+  expect(command()).toMatchObject({ status: 0, told: expect.stringMatching(/^Fulmar: \d+ events sealed/) as unknown });
   await tamper(`delete from audit_event where id = '${second?.id ?? ""}'`);
   expect(await faults()).toEqual([{ program: "Tern", number: 2, eventId: second?.id, fault: "its event is gone" }]);
   await asOwner(
