@@ -33,6 +33,7 @@ const NEVER_TAKEN_OUT = [
   "step_stop",
   "incident",
   "hand_over",
+  "api_token",
 ];
 /** One row that the migration puts in. */
 const READ_AND_CHANGE = ["site_setting"];

@@ -62,6 +62,7 @@ const SUBJECTS: Record<string, string> = {
   Deviation: "deviation",
   SheetPrint: "print of a sheet",
   Incident: "incident",
+  ApiToken: "API token",
   IncidentNote: "note of an incident",
   IncidentPhoto: "photo of an incident",
 };
@@ -76,6 +77,8 @@ const LEFT_OUT = new Set([
   "updatedBy",
   "passwordHash",
   "token",
+  "tokenHash",
+  "lastUsedAt",
   "bytes",
   "content",
   "input",

@@ -38,6 +38,7 @@ const PROGRAM_TABLES = [
   "incident_note",
   "incident_photo",
   "hand_over",
+  "api_token",
   "mail_outbox",
 ];
 const SITE_TABLES = [

@@ -1,3 +1,4 @@
+import { ApiToken } from "./api-token.ts";
 import { Assessment } from "./assessment.ts";
 import { AuditEvent } from "./audit-event.ts";
 import { BondingMaterial } from "./bonding-material.ts";
@@ -85,6 +86,7 @@ export const entities = [
   FlowRevision,
   StepTemplate,
   FlowTemplate,
+  ApiToken,
   Assessment,
   Sheet,
   SheetRevision,
