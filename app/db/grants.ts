@@ -72,6 +72,8 @@ const READ_AND_WRITE = [
   "favourite",
   "saved_filter",
   "preference",
+  "api_answer",
+  "api_rate",
   "mail_choice",
 ];
 

@@ -7,9 +7,14 @@ const TITLES = {
   404: "There is nothing here",
   405: "That cannot be done here",
   406: "It cannot be given in that form",
+  409: "It cannot be done as things stand",
+  412: "It has changed since you read it",
   413: "The request is too large",
   415: "The request has the wrong content type",
   422: "What was sent cannot be used",
+  428: "Say which version you mean",
+  429: "Too many requests",
+  500: "That did not work",
 } as const;
 
 /** Refusals that the API knows. */

@@ -1,3 +1,5 @@
+import { ApiAnswer } from "./api-answer.ts";
+import { ApiRate } from "./api-rate.ts";
 import { ApiToken } from "./api-token.ts";
 import { Assessment } from "./assessment.ts";
 import { AuditEvent } from "./audit-event.ts";
@@ -86,6 +88,8 @@ export const entities = [
   FlowRevision,
   StepTemplate,
   FlowTemplate,
+  ApiAnswer,
+  ApiRate,
   ApiToken,
   Assessment,
   Sheet,
