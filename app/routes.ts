@@ -146,6 +146,7 @@ export default [
     ]),
     route("demo", "routes/_app/demo.tsx"),
     route("settings", "routes/_app/settings.tsx"),
+    route("api", "routes/_app/api.tsx"),
     route("tokens", "routes/_app/tokens.tsx"),
     route("delegates", "routes/_app/delegates.tsx"),
     route("preferences", "routes/_app/preferences.tsx"),

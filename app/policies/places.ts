@@ -38,6 +38,7 @@ const WITHIN: (Page & { open: (actor: Actor) => boolean })[] = [
     also: "access for scripts and instruments, keys",
     open: (actor) => mayOnSite(actor, "see the audit trail") || programsWhere(actor, "see released sheets").length > 0,
   },
+  { name: "API", path: "/api", also: "reference, OpenAPI, scripts, integration", open: () => true },
   { name: "Delegates", path: "/delegates", also: "who stands in for a process owner, absence, leave", open: seesWork },
   {
     name: "Hand-overs",

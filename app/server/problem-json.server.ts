@@ -1,5 +1,3 @@
-import { refusedSentence, refusedStatus } from "./problem.server.ts";
-
 const TITLES = {
   400: "The request could not be read",
   401: "Please sign in",
@@ -31,12 +29,4 @@ export function problemJson(
     status,
     headers: { "Content-Type": "application/problem+json", ...headers },
   });
-}
-
-/** A refusal that a service has thrown, as the API gives it; anything else is thrown on. */
-export function problemJsonOf(error: unknown): Response {
-  const detail = refusedSentence(error);
-  const status = refusedStatus(error);
-  if (detail === null || status === null || !(status in TITLES)) throw error;
-  return problemJson(status as ProblemStatus, detail);
 }
