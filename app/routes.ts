@@ -148,6 +148,11 @@ export default [
     route("settings", "routes/_app/settings.tsx"),
     route("api", "routes/_app/api.tsx"),
     route("tokens", "routes/_app/tokens.tsx"),
+    ...prefix("audit", [
+      index("routes/_app/audit/list.tsx"),
+      route("trail.csv", "routes/_app/audit/csv.ts"),
+      route("seals", "routes/_app/audit/seals.tsx"),
+    ]),
     route("delegates", "routes/_app/delegates.tsx"),
     route("preferences", "routes/_app/preferences.tsx"),
     route("preferences/mail", "routes/_app/mail/choices.tsx"),

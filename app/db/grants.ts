@@ -35,6 +35,8 @@ const NEVER_TAKEN_OUT = [
   "hand_over",
   "api_token",
 ];
+/** Written by functions of the database alone. */
+const READ_ONLY = ["audit_seal"];
 /** One row that the migration puts in. */
 const READ_AND_CHANGE = ["site_setting"];
 const READ_AND_WRITE = [
@@ -83,6 +85,7 @@ export function grantStatements(role: string): string[] {
   return [
     `grant usage on schema public to ${quoted}`,
     `revoke all on all tables in schema public from ${quoted}`,
+    ...READ_ONLY.map((table) => `grant select on "${table}" to ${quoted}`),
     ...ADD_ONLY.map((table) => `grant select, insert on "${table}" to ${quoted}`),
     ...NEVER_TAKEN_OUT.map((table) => `grant select, insert, update on "${table}" to ${quoted}`),
     ...READ_AND_CHANGE.map((table) => `grant select, update on "${table}" to ${quoted}`),

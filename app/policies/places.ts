@@ -39,6 +39,12 @@ const WITHIN: (Page & { open: (actor: Actor) => boolean })[] = [
     open: (actor) => mayOnSite(actor, "see the audit trail") || programsWhere(actor, "see released sheets").length > 0,
   },
   { name: "API", path: "/api", also: "reference, OpenAPI, scripts, integration", open: () => true },
+  {
+    name: "Audit trail",
+    path: "/audit",
+    also: "who changed what, log, history, seals",
+    open: (actor) => mayOnSite(actor, "see the audit trail"),
+  },
   { name: "Delegates", path: "/delegates", also: "who stands in for a process owner, absence, leave", open: seesWork },
   {
     name: "Hand-overs",

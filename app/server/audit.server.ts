@@ -61,6 +61,12 @@ const SUBJECTS: Record<string, string> = {
   SheetComment: "comment in a review",
   Deviation: "deviation",
   SheetPrint: "print of a sheet",
+  LotSheet: "sheet of a lot",
+  FloorEntry: "entry of the floor",
+  LotHold: "hold of a lot",
+  StepStop: "stop of a step",
+  HandOver: "hand-over",
+  Delegation: "delegation",
   Incident: "incident",
   ApiToken: "API token",
   IncidentNote: "note of an incident",
@@ -83,6 +89,7 @@ const LEFT_OUT = new Set([
   "content",
   "input",
   "result",
+  "lots",
 ]);
 
 type Plain = Record<string, unknown>;

@@ -110,6 +110,7 @@ describe("every table", () => {
     "membership",
     "program",
     "audit_event",
+    "audit_seal",
   ])("%s shows nothing to nobody", async (table) => {
     expect(await forgetful(null, `select * from "${table}"`)).toEqual([]);
   });

@@ -3,6 +3,7 @@ import { ApiRate } from "./api-rate.ts";
 import { ApiToken } from "./api-token.ts";
 import { Assessment } from "./assessment.ts";
 import { AuditEvent } from "./audit-event.ts";
+import { AuditSeal } from "./audit-seal.ts";
 import { BondingMaterial } from "./bonding-material.ts";
 import { Carrier } from "./carrier.ts";
 import { CarrierUnit } from "./carrier-unit.ts";
@@ -131,4 +132,5 @@ export const entities = [
   MailChoice,
   DemoRecord,
   AuditEvent,
+  AuditSeal,
 ];

@@ -28,6 +28,8 @@ import { Incidents } from "./2026-12-14-incidents.ts";
 import { ApiTokens } from "./2026-12-17-api-tokens.ts";
 import { ApiAnswers } from "./2026-12-17-api-answers.ts";
 import { HandOvers } from "./2026-12-15-hand-over.ts";
+import { PrintRetention } from "./2026-12-18-print-retention.ts";
+import { AuditSeal } from "./2026-12-19-audit-seal.ts";
 
 /** Every migration in the order in which it runs. */
 export const migrations = [
@@ -59,6 +61,11 @@ export const migrations = [
   { name: "2026-12-13-lots-and-floor", class: LotsAndFloor },
   { name: "2026-12-14-incidents", class: Incidents },
   { name: "2026-12-15-hand-over", class: HandOvers },
+<<<<<<< HEAD
   { name: "2026-12-17-api-tokens", class: ApiTokens },
   { name: "2026-12-17-api-answers", class: ApiAnswers },
+=======
+  { name: "2026-12-18-print-retention", class: PrintRetention },
+  { name: "2026-12-19-audit-seal", class: AuditSeal },
+>>>>>>> main
 ];
