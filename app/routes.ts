@@ -9,7 +9,7 @@ export default [
     route("unsubscribe/:token", "routes/_public/unsubscribe.tsx"),
   ]),
   route("sign-out", "routes/_auth/sign-out.ts"),
-  ...prefix("api/v1", [route("*", "routes/api.v1/endpoint.ts")]),
+  ...prefix("api/v1", [route("openapi.json", "routes/api.v1/openapi.ts"), route("*", "routes/api.v1/endpoint.ts")]),
   layout("routes/_print/layout.tsx", [
     route("sheets/:assessmentId", "routes/_print/sheet.tsx"),
     route("sheets/:assessmentId/draft.pdf", "routes/_print/draft-pdf.ts"),
