@@ -33,6 +33,7 @@ const NEVER_TAKEN_OUT = [
   "step_stop",
   "incident",
   "hand_over",
+  "api_token",
 ];
 /** Written by functions of the database alone. */
 const READ_ONLY = ["audit_seal"];
@@ -73,6 +74,8 @@ const READ_AND_WRITE = [
   "favourite",
   "saved_filter",
   "preference",
+  "api_answer",
+  "api_rate",
   "mail_choice",
 ];
 

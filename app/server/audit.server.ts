@@ -68,6 +68,7 @@ const SUBJECTS: Record<string, string> = {
   HandOver: "hand-over",
   Delegation: "delegation",
   Incident: "incident",
+  ApiToken: "API token",
   IncidentNote: "note of an incident",
   IncidentPhoto: "photo of an incident",
 };
@@ -82,6 +83,8 @@ const LEFT_OUT = new Set([
   "updatedBy",
   "passwordHash",
   "token",
+  "tokenHash",
+  "lastUsedAt",
   "bytes",
   "content",
   "input",

@@ -1,11 +1,14 @@
 import { createContext, type RouterContextProvider } from "react-router";
 import type { Actor } from "#app/policies/roles.ts";
+import type { TokenBearer } from "#app/services/api/token-actor.server.ts";
 import type { ActorScope } from "./scope.server.ts";
 
 /** Set by middleware for everything below it. */
 export const requestIdContext = createContext<string>("");
 export const nonceContext = createContext<string>("");
 export const actorContext = createContext<Actor | null>(null);
+/** set where a request of the API came with a token; its cookie then counts for nothing */
+export const bearerContext = createContext<TokenBearer | null>(null);
 
 /**
  * The scope of a request that needs a signed-in person. The session middleware has already sent everybody else away, so a
@@ -14,5 +17,6 @@ export const actorContext = createContext<Actor | null>(null);
 export function scopeOf(context: Readonly<RouterContextProvider>): ActorScope {
   const actor = context.get(actorContext);
   if (!actor) throw new Error("This route is not behind the signed-in layout.");
-  return { actor, requestId: context.get(requestIdContext) };
+  const onlyProgram = context.get(bearerContext)?.programId;
+  return { actor, requestId: context.get(requestIdContext), ...(onlyProgram && { onlyProgram }) };
 }

@@ -38,6 +38,7 @@ const PROGRAM_TABLES = [
   "incident_note",
   "incident_photo",
   "hand_over",
+  "api_token",
   "mail_outbox",
 ];
 const SITE_TABLES = [
@@ -61,7 +62,7 @@ const SITE_TABLES = [
 ];
 
 /** What a person keeps for themselves. */
-const OWN_TABLES = ["recent_visit", "favourite", "saved_filter", "preference", "mail_choice"];
+const OWN_TABLES = ["recent_visit", "favourite", "saved_filter", "preference", "mail_choice", "api_answer"];
 
 let engineer: ActorScope;
 let technician: ActorScope;
@@ -160,6 +161,10 @@ describe("what a person keeps for themselves", () => {
     favourite: ["kind, record_id, at", "'film', gen_random_uuid(), now()"],
     saved_filter: ["list, name, query, at", "'/films', 'metals', 'kind=metal', now()"],
     preference: ["value, at", "'{}', now()"],
+    api_answer: [
+      "caller, key, request_hash, headers, body, at",
+      "gen_random_uuid(), 'k', 'x', '{}', '', now()",
+    ],
     mail_choice: ["value, unsubscribe_token, at", "'{}', gen_random_uuid()::text, now()"],
   };
   const insert = (table: string, person: string) => {

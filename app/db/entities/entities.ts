@@ -1,3 +1,6 @@
+import { ApiAnswer } from "./api-answer.ts";
+import { ApiRate } from "./api-rate.ts";
+import { ApiToken } from "./api-token.ts";
 import { Assessment } from "./assessment.ts";
 import { AuditEvent } from "./audit-event.ts";
 import { AuditSeal } from "./audit-seal.ts";
@@ -86,6 +89,9 @@ export const entities = [
   FlowRevision,
   StepTemplate,
   FlowTemplate,
+  ApiAnswer,
+  ApiRate,
+  ApiToken,
   Assessment,
   Sheet,
   SheetRevision,

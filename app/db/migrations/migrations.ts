@@ -26,6 +26,8 @@ import { Delegations } from "./2026-12-12-delegations.ts";
 import { LotsAndFloor } from "./2026-12-13-lots-and-floor.ts";
 import { Incidents } from "./2026-12-14-incidents.ts";
 import { HandOvers } from "./2026-12-15-hand-over.ts";
+import { ApiTokens } from "./2026-12-17-api-tokens.ts";
+import { ApiAnswers } from "./2026-12-17-api-answers.ts";
 import { PrintRetention } from "./2026-12-18-print-retention.ts";
 import { AuditSeal } from "./2026-12-19-audit-seal.ts";
 
@@ -59,6 +61,8 @@ export const migrations = [
   { name: "2026-12-13-lots-and-floor", class: LotsAndFloor },
   { name: "2026-12-14-incidents", class: Incidents },
   { name: "2026-12-15-hand-over", class: HandOvers },
+  { name: "2026-12-17-api-tokens", class: ApiTokens },
+  { name: "2026-12-17-api-answers", class: ApiAnswers },
   { name: "2026-12-18-print-retention", class: PrintRetention },
   { name: "2026-12-19-audit-seal", class: AuditSeal },
 ];
