@@ -1,3 +1,4 @@
+import { randomUUID } from "node:crypto";
 import { z } from "zod";
 import { Incident } from "#app/db/entities/incident.ts";
 import { SUPPORT_CLASSES } from "#app/engine/vocabulary.ts";
@@ -82,6 +83,7 @@ const incidentJson = (found: Pick<FoundIncident, keyof Incident & keyof FoundInc
 });
 
 const incidentBody = z.strictObject({
+  id: id.optional().describe("Made by who sends it, so that it counts once."),
   assessment_id: id,
   leg: z.int().min(0).max(25).optional(),
   step: z.int().min(1).max(200),
@@ -122,6 +124,7 @@ const pointerOf = (field: string) => POINTERS[field] ?? `/${field}`;
 /** The report as the form’s own schema reads it, so that one schema has all the rules; the place is put in as it came. */
 function valuesOf(body: IncidentBody) {
   const parsed = incidentSchema.safeParse({
+    id: body.id ?? randomUUID(),
     assessment: body.assessment_id,
     leg: body.leg ?? 0,
     step: body.step,
