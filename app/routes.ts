@@ -5,6 +5,8 @@ export default [
   route("readyz", "routes/readyz.ts"),
   layout("routes/_public/layout.tsx", [
     route("sign-in", "routes/_public/sign-in.tsx"),
+    route("forgotten", "routes/_public/forgotten.tsx"),
+    route("set-password/:secret", "routes/_public/set-password.tsx"),
     route("s/:token", "routes/_public/sheet-status.tsx"),
     route("unsubscribe/:token", "routes/_public/unsubscribe.tsx"),
   ]),

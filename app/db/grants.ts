@@ -72,6 +72,8 @@ const READ_AND_WRITE = [
   "saved_filter",
   "preference",
   "mail_choice",
+  "person_token",
+  "rate_limit",
 ];
 
 /** SQL that gives the role its rights and nothing more. */

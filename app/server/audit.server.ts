@@ -75,6 +75,7 @@ const LEFT_OUT = new Set([
   "createdBy",
   "updatedBy",
   "passwordHash",
+  "lastSignInAt",
   "token",
   "bytes",
   "content",

@@ -1,10 +1,11 @@
 import { createContext, type RouterContextProvider } from "react-router";
 import type { Actor } from "#app/policies/roles.ts";
-import type { ActorScope } from "./scope.server.ts";
+import type { ActorScope, SessionOfScope } from "./scope.server.ts";
 
 /** Set by middleware for everything below it. */
 export const requestIdContext = createContext<string>("");
 export const nonceContext = createContext<string>("");
+export const sessionContext = createContext<SessionOfScope | null>(null);
 export const actorContext = createContext<Actor | null>(null);
 
 /**
@@ -14,5 +15,5 @@ export const actorContext = createContext<Actor | null>(null);
 export function scopeOf(context: Readonly<RouterContextProvider>): ActorScope {
   const actor = context.get(actorContext);
   if (!actor) throw new Error("This route is not behind the signed-in layout.");
-  return { actor, requestId: context.get(requestIdContext) };
+  return { actor, session: context.get(sessionContext), requestId: context.get(requestIdContext) };
 }

@@ -26,6 +26,7 @@ import { Delegations } from "./2026-12-12-delegations.ts";
 import { LotsAndFloor } from "./2026-12-13-lots-and-floor.ts";
 import { Incidents } from "./2026-12-14-incidents.ts";
 import { HandOvers } from "./2026-12-15-hand-over.ts";
+import { PeopleAndAccess } from "./2026-12-16-people-and-access.ts";
 
 /** Every migration in the order in which it runs. */
 export const migrations = [
@@ -57,4 +58,5 @@ export const migrations = [
   { name: "2026-12-13-lots-and-floor", class: LotsAndFloor },
   { name: "2026-12-14-incidents", class: Incidents },
   { name: "2026-12-15-hand-over", class: HandOvers },
+  { name: "2026-12-16-people-and-access", class: PeopleAndAccess },
 ];
