@@ -152,6 +152,11 @@ export default [
       route(":instrumentId/reference", "routes/_app/instruments/reference.tsx"),
     ]),
     route("demo", "routes/_app/demo.tsx"),
+    ...prefix("people", [
+      index("routes/_app/people/list.tsx"),
+      route("new", "routes/_app/people/new.tsx"),
+      route(":personId", "routes/_app/people/person.tsx"),
+    ]),
     route("settings", "routes/_app/settings.tsx"),
     route("delegates", "routes/_app/delegates.tsx"),
     route("preferences", "routes/_app/preferences.tsx"),
