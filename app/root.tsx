@@ -13,6 +13,7 @@ import {
 import stylesheet from "./app.css?url";
 import { ErrorPage } from "./components/layout/ErrorPage.tsx";
 import { DEFAULT_PREFERENCES, type Preferences } from "./lib/preferences.ts";
+import { bearer } from "./middleware/bearer.server.ts";
 import { originCheck } from "./middleware/origin-check.server.ts";
 import { requestLog } from "./middleware/request-log.server.ts";
 import { securityHeaders } from "./middleware/security-headers.server.ts";
@@ -20,7 +21,7 @@ import { session } from "./middleware/session.server.ts";
 import { nonceContext } from "./server/contexts.server.ts";
 import type { Route } from "./+types/root";
 
-export const middleware: Route.MiddlewareFunction[] = [requestLog, securityHeaders, originCheck, session];
+export const middleware: Route.MiddlewareFunction[] = [requestLog, securityHeaders, bearer, originCheck, session];
 
 /** Every page needs these three; without being named here they would be found only once the style sheet is read. */
 const FONTS = [regular, medium, semibold];

@@ -11,12 +11,7 @@ export default [
     route("unsubscribe/:token", "routes/_public/unsubscribe.tsx"),
   ]),
   route("sign-out", "routes/_auth/sign-out.ts"),
-  ...prefix("api/v1", [
-    route("estimates", "routes/api.v1/estimates.ts"),
-    route("scans", "routes/api.v1/scans.ts"),
-    route("scans/:readingId", "routes/api.v1/scan.ts"),
-    route("jobs/:jobId", "routes/api.v1/job.ts"),
-  ]),
+  ...prefix("api/v1", [route("openapi.json", "routes/api.v1/openapi.ts"), route("*", "routes/api.v1/endpoint.ts")]),
   layout("routes/_print/layout.tsx", [
     route("sheets/:assessmentId", "routes/_print/sheet.tsx"),
     route("sheets/:assessmentId/draft.pdf", "routes/_print/draft-pdf.ts"),
@@ -158,6 +153,13 @@ export default [
       route(":personId", "routes/_app/people/person.tsx"),
     ]),
     route("settings", "routes/_app/settings.tsx"),
+    route("api", "routes/_app/api.tsx"),
+    route("tokens", "routes/_app/tokens.tsx"),
+    ...prefix("audit", [
+      index("routes/_app/audit/list.tsx"),
+      route("trail.csv", "routes/_app/audit/csv.ts"),
+      route("seals", "routes/_app/audit/seals.tsx"),
+    ]),
     route("delegates", "routes/_app/delegates.tsx"),
     route("preferences", "routes/_app/preferences.tsx"),
     route("preferences/mail", "routes/_app/mail/choices.tsx"),

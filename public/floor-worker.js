@@ -1,9 +1,10 @@
 /*
- * Keeps the sheets of the floor that were opened last, so that they can be read through a lost connection. Every page that can be
+ * Keeps the pages of the floor that were opened last, so that they can be read through a lost connection. Every page that can be
  * fetched is fetched; what is kept says when it was fetched, belongs to one person, and goes after twelve hours or when somebody else
  * comes. Signing out takes all of it away.
  */
 const PAGES = "floor-pages-";
+const FIND = "/floor";
 const ASSETS = "floor-assets-1";
 const KEPT_FOR = 12 * 3600 * 1000;
 /** A kept page is better than one that may never come. */
@@ -23,17 +24,34 @@ self.addEventListener("fetch", (event) => {
 
 self.addEventListener("message", (event) => {
   if (Array.isArray(event.data?.keep)) event.waitUntil(keepAll(event.data.keep));
+  if (event.data?.forget === true) event.waitUntil(forget());
 });
 
+/** Counts how often all was taken away: what was on its way before that is not kept any more. */
+let forgotten = 0;
+
+async function forget() {
+  forgotten += 1;
+  for (const name of await caches.keys()) if (name.startsWith(PAGES)) await caches.delete(name);
+}
+
 async function page(event) {
+  const since = forgotten;
   const old = await kept(event.request.url);
   try {
     const answer = await (old ? Promise.race([fetch(event.request), tooLate()]) : fetch(event.request));
-    event.waitUntil(keep(event.request.url, answer.clone()));
+    event.waitUntil(keep(event.request.url, answer.clone(), since));
     return answer;
   } catch {
-    return old ?? (await caches.match("/unreachable.html")) ?? Response.error();
+    return old ?? (await toFind(event.request.url)) ?? (await caches.match("/unreachable.html")) ?? Response.error();
   }
+}
+
+/** Whoever looks for a lot without a connection is led to the lots that were theirs last; null for every other page. */
+async function toFind(url) {
+  const { pathname, search } = new URL(url);
+  if (pathname !== FIND || search === "") return null;
+  return (await kept(new URL(FIND, location.origin).href)) && Response.redirect(FIND);
 }
 
 const tooLate = () => new Promise((_, reject) => setTimeout(reject, PATIENCE));
@@ -51,7 +69,7 @@ async function asset(request) {
 }
 
 /** Keeps a page of a lot, with the files that it names, for the person whom it was made for. */
-async function keep(url, answer) {
+async function keep(url, answer, since = forgotten) {
   if (!answer.ok || answer.redirected) return;
   const text = await answer.text();
   const person = /data-floor-person="([0-9a-f-]{36})"/.exec(text)?.[1];
@@ -62,7 +80,9 @@ async function keep(url, answer) {
   headers.set("Kept-At", new Date().toISOString());
   headers.delete("Content-Encoding");
   headers.delete("Content-Length");
+  if (since !== forgotten) return;
   await (await caches.open(PAGES + person)).put(url, new Response(text, { headers }));
+  if (since !== forgotten) await caches.delete(PAGES + person);
   const files = [...new Set(text.match(/\/assets\/[\w.-]+\.(?:js|css|woff2)/g) ?? [])];
   await Promise.all(files.map((file) => asset(new Request(new URL(file, location.origin))).catch(() => undefined)));
 }
@@ -87,13 +107,15 @@ async function kept(url) {
 
 /** Keeps pages that were not opened yet: the steps of a lot that somebody is about to work on. One after the other, to be no burden. */
 async function keepAll(paths) {
+  const since = forgotten;
   for (const path of paths) {
     const url = new URL(path, location.origin).href;
     const old = await kept(url);
     const at = old?.headers.get("Kept-At");
     if (at && Date.now() - Date.parse(at) < 60_000) continue;
     try {
-      await keep(url, await fetch(url, { credentials: "same-origin" }));
+      if (since !== forgotten) return;
+      await keep(url, await fetch(url, { credentials: "same-origin" }), since);
     } catch {
       return;
     }

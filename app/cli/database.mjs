@@ -18,7 +18,7 @@ const appRole = "planeward_app";
  */
 
 /**
- * @param {Database} database
+ * @param {Pick<Database, "port" | "passwords">} database
  * @param {keyof import("./secrets.mjs").DatabasePasswords} who
  * @param {string} name the database's
  * @returns {string}

@@ -33,7 +33,10 @@ const NEVER_TAKEN_OUT = [
   "step_stop",
   "incident",
   "hand_over",
+  "api_token",
 ];
+/** Written by functions of the database alone. */
+const READ_ONLY = ["audit_seal"];
 /** One row that the migration puts in. */
 const READ_AND_CHANGE = ["site_setting"];
 const READ_AND_WRITE = [
@@ -71,6 +74,8 @@ const READ_AND_WRITE = [
   "favourite",
   "saved_filter",
   "preference",
+  "api_answer",
+  "api_rate",
   "mail_choice",
   "person_token",
   "rate_limit",
@@ -82,6 +87,7 @@ export function grantStatements(role: string): string[] {
   return [
     `grant usage on schema public to ${quoted}`,
     `revoke all on all tables in schema public from ${quoted}`,
+    ...READ_ONLY.map((table) => `grant select on "${table}" to ${quoted}`),
     ...ADD_ONLY.map((table) => `grant select, insert on "${table}" to ${quoted}`),
     ...NEVER_TAKEN_OUT.map((table) => `grant select, insert, update on "${table}" to ${quoted}`),
     ...READ_AND_CHANGE.map((table) => `grant select, update on "${table}" to ${quoted}`),

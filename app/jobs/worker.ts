@@ -6,6 +6,7 @@ import { configuredTransport } from "#app/integrations/mail/configured.server.ts
 import { environment } from "#app/server/environment.server.ts";
 import { log } from "#app/server/log.server.ts";
 import { announceOutOfDate } from "#app/services/assessments/announce-out-of-date.server.ts";
+import { sealAudit } from "#app/services/audit/seal.server.ts";
 import { JOB_TASK } from "#app/services/jobs/enqueue.server.ts";
 import { freeLostJobs } from "#app/services/jobs/lost-jobs.server.ts";
 import { runJob } from "#app/services/jobs/run-job.server.ts";
@@ -13,6 +14,7 @@ import { queueLostMail } from "#app/services/mail/lost-mail.server.ts";
 import { makeDigests } from "#app/services/mail/make-digests.server.ts";
 import { MAIL_TASK } from "#app/services/mail/queue-mail.server.ts";
 import { sendMail } from "#app/services/mail/send-mail.server.ts";
+import { forgetOldPrints } from "#app/services/sheets/print-retention.server.ts";
 
 /** How often the jobs of workers that were killed are looked for, milliseconds. */
 const LOOK_AGAIN = 10_000;
@@ -68,11 +70,15 @@ const mail = await worker({
       options: { backfillPeriod: LATEST_DIGEST },
     },
     { task: "out of date", match: "*/5 * * * *" },
+    { task: "old prints", match: "30 3 * * *" },
+    { task: "seals", match: "* * * * *" },
   ]),
   taskList: {
     [MAIL_TASK]: (payload) => sendMail(payload, transport),
     digests: () => makeDigests(new Date().toISOString().slice(0, 10)),
     "out of date": () => announceOutOfDate(),
+    seals: async () => void (await sealAudit()),
+    "old prints": async () => void (await forgetOldPrints()),
   },
 });
 if (!transport) log.warn("no mail server is named by SMTP_URL, so mail waits in the outbox");

@@ -53,6 +53,7 @@ export function headline({ sheets, lots, incidents, decisions, outOfDate, notAss
     part(toSign.total, "deviation waits for your signature", "deviations wait for your signature"),
     part(returned.total, "sheet was returned to you", "sheets were returned to you"),
     part(lots.blocked.total, "lot or step is held", "lots or steps are held"),
+    part(lots.toTake.total, "place is to be taken over", "places are to be taken over"),
     part(lots.toMove.total, "lot is on an old sheet", "lots are on old sheets"),
     part(incidents.total, "incident is to be followed up", "incidents are to be followed up"),
     part(decisions.total, "flow needs a decision", "flows need a decision"),

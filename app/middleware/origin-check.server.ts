@@ -1,4 +1,5 @@
 import type { MiddlewareFunction } from "react-router";
+import { bearerContext } from "#app/server/contexts.server.ts";
 import { environment } from "#app/server/environment.server.ts";
 import { log } from "#app/server/log.server.ts";
 import { loggedPath } from "#app/server/logged-path.server.ts";
@@ -15,8 +16,9 @@ export function comesFromUs(request: Request, allowed: readonly string[]): boole
 }
 
 /** Refuses a change asked for by another site's page; the router's own check leaves resource routes out. */
-export const originCheck: MiddlewareFunction<Response> = async ({ request }, next) => {
-  if (comesFromUs(request, environment.ALLOWED_ORIGINS)) return next();
+export const originCheck: MiddlewareFunction<Response> = async ({ request, context }, next) => {
+  // No browser adds a token by itself, so a request with one was meant by who holds it.
+  if (context.get(bearerContext) || comesFromUs(request, environment.ALLOWED_ORIGINS)) return next();
   log.warn({ origin: request.headers.get("Origin"), path: loggedPath(request) }, "foreign origin refused");
   return new Response("This request came from another site, so it was not carried out.\n", {
     status: 403,

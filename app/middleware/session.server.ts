@@ -1,10 +1,11 @@
 import type { MiddlewareFunction } from "react-router";
-import { actorContext, requestIdContext, sessionContext } from "#app/server/contexts.server.ts";
+import { actorContext, bearerContext, requestIdContext, sessionContext } from "#app/server/contexts.server.ts";
 import { clearedSessionCookie, sessionCookie, tokenOf } from "#app/server/session-cookie.server.ts";
 import { resumeSession } from "#app/services/sessions.server.ts";
 
 /** Finds out who is asking, for every request below it; nobody is a fine answer. */
 export const session: MiddlewareFunction<Response> = async ({ request, context }, next) => {
+  if (context.get(bearerContext)) return next();
   const token = await tokenOf(request);
   if (!token) return next();
   const resumed = await resumeSession(token, context.get(requestIdContext));

@@ -33,6 +33,19 @@ const WITHIN: (Page & { open: (actor: Actor) => boolean })[] = [
   { name: "Favourites", path: "/favourites", also: "marked, starred", open: seesLibrary },
   { name: "Preferences", path: "/preferences", also: "theme, dark, density, settings", open: () => true },
   { name: "E-mail", path: "/preferences/mail", also: "mail, digest, unsubscribe, notifications", open: () => true },
+  {
+    name: "API tokens",
+    path: "/tokens",
+    also: "access for scripts and instruments, keys",
+    open: (actor) => mayOnSite(actor, "see the audit trail") || programsWhere(actor, "see released sheets").length > 0,
+  },
+  { name: "API", path: "/api", also: "reference, OpenAPI, scripts, integration", open: () => true },
+  {
+    name: "Audit trail",
+    path: "/audit",
+    also: "who changed what, log, history, seals",
+    open: (actor) => mayOnSite(actor, "see the audit trail"),
+  },
   { name: "Delegates", path: "/delegates", also: "who stands in for a process owner, absence, leave", open: seesWork },
   {
     name: "Hand-overs",

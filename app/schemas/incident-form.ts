@@ -56,6 +56,8 @@ const id = (message: string) => z.uuid(message);
 
 /** What somebody reports of an incident. */
 export interface IncidentValues {
+  /** made before it is sent, so that a report counts once however often it comes */
+  id: string;
   assessment: string;
   leg: number;
   step: number;
@@ -74,6 +76,7 @@ export interface IncidentValues {
 /** A report as its form sends it: the place in per cent of the radius and degrees from the notch. */
 export const incidentSchema = z
   .object({
+    id: id("Open the form again: its own number is missing."),
     assessment: id("Choose the flow first."),
     leg: wholeNumber("Choose the slots.", { least: 0, most: 25 }),
     step: wholeNumber("Choose the step at which it happened.", { least: 1, most: 200 }),

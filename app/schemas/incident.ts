@@ -91,8 +91,8 @@ export interface ReportGround {
   steps: { value: string; label: string }[];
   /** names of the lots of the program, the newest first */
   lots: string[];
-  /** what the address brings along, and now, in UTC */
-  given: { step: string; leg: string; lot: string; wafer: string; occurredAt: string };
+  /** what the address brings along, an id for the report, and now, in UTC */
+  given: { id: string; step: string; leg: string; lot: string; wafer: string; occurredAt: string };
 }
 
 /** An incident as a row of the review board's list. */

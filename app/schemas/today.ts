@@ -82,7 +82,8 @@ export interface TodaySheets {
 /** A lot that does not go on, as Today lists it. */
 export interface TodayLot {
   id: string;
-  lotId: string;
+  /** where it is looked at, and dealt with */
+  path: string;
   title: string;
   words: string;
   program: string;
@@ -109,6 +110,8 @@ export interface TodayLots {
   blocked: TodayGroup<TodayLot>;
   /** on a sheet that is not in force any more, for who may move them */
   toMove: TodayGroup<TodayLot>;
+  /** places that a shift handed over and nobody has taken, for who works in shifts */
+  toTake: TodayGroup<TodayLot>;
 }
 
 /** What Today shows to a person. A guest has programs and released sheets alone. */

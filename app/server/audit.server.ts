@@ -61,7 +61,14 @@ const SUBJECTS: Record<string, string> = {
   SheetComment: "comment in a review",
   Deviation: "deviation",
   SheetPrint: "print of a sheet",
+  LotSheet: "sheet of a lot",
+  FloorEntry: "entry of the floor",
+  LotHold: "hold of a lot",
+  StepStop: "stop of a step",
+  HandOver: "hand-over",
+  Delegation: "delegation",
   Incident: "incident",
+  ApiToken: "API token",
   IncidentNote: "note of an incident",
   IncidentPhoto: "photo of an incident",
 };
@@ -77,10 +84,13 @@ const LEFT_OUT = new Set([
   "passwordHash",
   "lastSignInAt",
   "token",
+  "tokenHash",
+  "lastUsedAt",
   "bytes",
   "content",
   "input",
   "result",
+  "lots",
 ]);
 
 type Plain = Record<string, unknown>;

@@ -16,6 +16,8 @@ const schema = z
           .map((origin) => origin.trim())
           .filter(Boolean),
       ),
+    /** of one token, or of one person without a token */
+    API_REQUESTS_PER_MINUTE: z.coerce.number().int().min(1).max(100_000).default(120),
     LOG_LEVEL: z.enum(["debug", "info", "warn", "error", "silent"]).default("info"),
   })
   .superRefine(requireWholeMail);

@@ -8,15 +8,23 @@ import { problem } from "./problem.server.ts";
 const FIELD = /^\w+(?:\[\d{1,2}\])?(?:\.\w+){0,2}$/;
 
 /**
- * The fields of a posted form. NUL, which the database does not know, is taken out of texts; what no form of ours could have
- * sent is passed over, so that a made-up list of a million lines is not shown back.
+ * The fields of a posted form.
  * @throws 400 for a request that is no form
  */
 export async function postedForm(request: Request): Promise<FormData> {
+  return ownFields(
+    await request.formData().catch(() => {
+      throw problem(400, "What was sent is not a form. Open the page again and send its form.");
+    }),
+  );
+}
+
+/**
+ * Fields as they were posted. NUL, which the database does not know, is taken out of texts; what no form of ours could have sent is
+ * passed over, so that a made-up list of a million lines is not shown back.
+ */
+export function ownFields(posted: FormData): FormData {
   const formData = new FormData();
-  const posted = await request.formData().catch(() => {
-    throw problem(400, "What was sent is not a form. Open the page again and send its form.");
-  });
   for (const [name, value] of posted)
     if (FIELD.test(name)) formData.append(name, typeof value === "string" ? value.replaceAll("\0", "") : value);
   return formData;

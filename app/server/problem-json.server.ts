@@ -1,5 +1,3 @@
-import { refusedSentence, refusedStatus } from "./problem.server.ts";
-
 const TITLES = {
   400: "The request could not be read",
   401: "Please sign in",
@@ -7,9 +5,14 @@ const TITLES = {
   404: "There is nothing here",
   405: "That cannot be done here",
   406: "It cannot be given in that form",
+  409: "It cannot be done as things stand",
+  412: "It has changed since you read it",
   413: "The request is too large",
   415: "The request has the wrong content type",
   422: "What was sent cannot be used",
+  428: "Say which version you mean",
+  429: "Too many requests",
+  500: "That did not work",
 } as const;
 
 /** Refusals that the API knows. */
@@ -26,12 +29,4 @@ export function problemJson(
     status,
     headers: { "Content-Type": "application/problem+json", ...headers },
   });
-}
-
-/** A refusal that a service has thrown, as the API gives it; anything else is thrown on. */
-export function problemJsonOf(error: unknown): Response {
-  const detail = refusedSentence(error);
-  const status = refusedStatus(error);
-  if (detail === null || status === null || !(status in TITLES)) throw error;
-  return problemJson(status as ProblemStatus, detail);
 }

@@ -26,6 +26,8 @@ export interface ActorScope {
   /** missing where the person does not act by a browser, such as in a job */
   session?: SessionOfScope | null;
   requestId: string;
+  /** the one program that a request with a token is for; row-level security then knows no other */
+  onlyProgram?: string;
   /** true only where the demo is loaded or taken out */
   atTheDemo?: boolean;
 }
@@ -47,10 +49,13 @@ export async function inScope<T>(scope: Scope | ActorScope, work: (em: EntityMan
   return em.transactional(async (transaction) => {
     await tellPerson(transaction, personId);
     await transaction.execute("select set_config('app.door', ?, true)", [door]);
+    await transaction.execute("select set_config('app.program', ?, true)", [programOf(scope)]);
     noteScope(transaction, { personId, requestId: scope.requestId });
     return work(transaction as EntityManager);
   });
 }
+
+const programOf = (scope: Scope | ActorScope) => ("actor" in scope ? (scope.onlyProgram ?? "") : "");
 
 function doorOf(scope: Scope | ActorScope): string {
   if ("actor" in scope) return scope.atTheDemo ? "demo" : "";

@@ -7,6 +7,7 @@ import {
   MaxTotalSizeExceededError,
   parseFormData,
 } from "@remix-run/form-data-parser";
+import { ownFields } from "./form.server.ts";
 import { problem } from "./problem.server.ts";
 
 /** A file as it came. */
@@ -98,7 +99,7 @@ async function readParts<Field extends string>(
       },
     );
     for (const field of fields) formData.delete(field);
-    return formData;
+    return ownFields(formData);
   } catch (error) {
     throw refusalOf(error, limit.words);
   }

@@ -37,7 +37,7 @@ export async function todayView(scope: ActorScope): Promise<TodayView> {
       kept: await keptGroups(em, scope),
       sheets: await sheetsOfToday(em, scope),
       incidents: works.length === 0 ? nothing : await incidentsOfToday(em, scope),
-      lots: works.length === 0 ? { blocked: nothing, toMove: nothing } : await lotsOfToday(em, scope),
+      lots: works.length === 0 ? { blocked: nothing, toMove: nothing, toTake: nothing } : await lotsOfToday(em, scope),
     };
     if (works.length === 0)
       return {

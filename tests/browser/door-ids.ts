@@ -169,6 +169,7 @@ async function reportedIncident(engineer: APIRequestContext, assessment: string)
       kind: "chip",
       severity: "near miss",
       words: "At the door",
+      id: randomUUID(),
       occurredAt: "2026-11-20 10:00",
       photos: {
         name: "door.png",

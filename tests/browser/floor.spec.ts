@@ -1,5 +1,6 @@
 import type { Browser, Page } from "@playwright/test";
 import { toDataURL } from "qrcode";
+import sharp from "sharp";
 import { assess, ownFlow, press } from "./flow-pages.ts";
 import { expect, expectNoAxeFindings, signIn, test } from "./support.ts";
 
@@ -42,6 +43,11 @@ async function lotOnSheet(page: Page, name: string): Promise<string> {
   await expect(page.getByRole("link", { name: title })).toBeVisible();
   return new URL(page.url()).pathname;
 }
+
+const photo = () =>
+  sharp({ create: { width: 800, height: 600, channels: 3, background: { r: 90, g: 90, b: 90 } } })
+    .png()
+    .toBuffer();
 
 async function newPage(browser: Browser, viewport: { width: number; height: number }): Promise<Page> {
   return (await browser.newContext({ viewport, serviceWorkers: "block" })).newPage();
@@ -204,7 +210,10 @@ test.describe("through a lost connection", () => {
     await page.goto(lot);
     await page.getByRole("button", { name: /^I have read/ }).click();
     await expect(page.getByRole("link", { name: /^Go to step 1,/ })).toBeVisible();
-    // Every step of the lot is kept, though none was opened.
+    await page.goto("/floor");
+    await expect(page.getByText("No connection.")).toBeHidden();
+    await page.getByRole("link", { name }).click();
+    // Every step of the lot is kept, though none was opened, the forms of the first two, where lots are found, and hand-overs.
     await expect
       .poll(
         () =>
@@ -214,9 +223,17 @@ test.describe("through a lost connection", () => {
           }),
         { timeout: 60_000 },
       )
-      .toBe(20);
+      .toBe(32);
 
     await context.setOffline(true);
+    await page.goto("/floor/hand-overs");
+    await expect(page.getByText("No connection.")).toBeVisible();
+    await expect(page.getByRole("link", { name: "Hand a place over" })).toBeHidden();
+    await page.goto(`/floor?lot=${name}`);
+    await expect(page).toHaveURL("/floor");
+    await expect(page.getByText("Only lots that were opened on this device")).toBeVisible();
+    await page.getByRole("link", { name }).click();
+    await expect(page.getByRole("heading", { level: 1, name: `Lot ${name}` })).toBeVisible();
     await page.goto(`${lot}/steps/1`);
     await expect(
       page.getByText("No connection: whether this sheet is still current could not be checked"),
@@ -225,11 +242,22 @@ test.describe("through a lost connection", () => {
     await expect(page.getByText("Current at")).toBeHidden();
     await page.getByRole("button", { name: /^Start this step/ }).click();
     await expect(page.getByRole("status", { name: "Entries that wait" })).toContainText("Step 1 started");
-    await page.getByRole("button", { name: /^Step done/ }).click();
+    await page.getByRole("link", { name: /^Report an incident/ }).click();
+    await page.getByLabel("What happened").selectOption("edge chip");
+    await page.getByLabel("How bad").selectOption("near miss");
+    await page.getByLabel("Wafer", { exact: true }).fill("W02");
+    await page.getByLabel("In your words").fill("Touched the cassette");
+    await page.getByLabel("Photos").setInputFiles({ name: "chip.png", mimeType: "image/png", buffer: await photo() });
+    await expectNoAxeFindings(page);
+    await page.getByRole("button", { name: "Report it" }).click();
     await expect(page.getByText(/^2 entries wait for the connection/)).toBeVisible();
-    await page.goto(`${lot}/steps/2`);
-    await page.getByRole("button", { name: /^Start this step/ }).click();
+    await expect(page.getByText("Incident, step 1")).toBeVisible();
+    await page.getByRole("button", { name: /^Step done/ }).click();
+    // It leads on to the next step, which this device kept.
+    await expect(page).toHaveURL(`${lot}/steps/2`);
     await expect(page.getByText(/^3 entries wait for the connection/)).toBeVisible();
+    await page.getByRole("button", { name: /^Start this step/ }).click();
+    await expect(page.getByText(/^4 entries wait for the connection/)).toBeVisible();
 
     // Meanwhile somebody who has a connection stops the second step.
     const other = await newPage(browser, TABLET);
@@ -241,15 +269,20 @@ test.describe("through a lost connection", () => {
     await expect(other.getByRole("alert")).toContainText("is stopped for every lot");
 
     await context.setOffline(false);
-    await expect(page.getByText("2 entries that waited have been sent.")).toBeVisible({ timeout: 30_000 });
+    await expect(page.getByText("3 entries that waited have been sent.")).toBeVisible({ timeout: 30_000 });
     const refused = page.getByRole("alert").filter({ hasText: "Not taken: Step 2 started" });
     await expect(refused).toContainText("is stopped for every lot: tool trouble");
     await refused.getByRole("button", { name: "Keep it as an observation" }).click();
-    await expect(page.getByText("3 entries that waited have been sent.")).toBeVisible({ timeout: 30_000 });
+    await expect(page.getByText("4 entries that waited have been sent.")).toBeVisible({ timeout: 30_000 });
     await page.goto(lot);
     const entries = page.getByRole("region", { name: "Entered last" });
     await expect(entries.getByText(/Step 2 started/)).toHaveCount(1);
     await expect(entries.getByText("done", { exact: true })).toHaveCount(1);
+
+    await page.goto(`/incidents?q=${name}`);
+    await page.getByRole("link", { name: /^TERN-I/ }).click();
+    await expect(page.getByText("Touched the cassette")).toBeVisible();
+    await expect(page.getByRole("img", { name: /photo/i })).toHaveCount(1);
 
     await page.goto("/");
     await press(page, "Sign out");

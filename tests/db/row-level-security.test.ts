@@ -38,6 +38,7 @@ const PROGRAM_TABLES = [
   "incident_note",
   "incident_photo",
   "hand_over",
+  "api_token",
   "mail_outbox",
 ];
 const SITE_TABLES = [
@@ -61,7 +62,7 @@ const SITE_TABLES = [
 ];
 
 /** What a person keeps for themselves. */
-const OWN_TABLES = ["recent_visit", "favourite", "saved_filter", "preference", "mail_choice"];
+const OWN_TABLES = ["recent_visit", "favourite", "saved_filter", "preference", "mail_choice", "api_answer"];
 
 let engineer: ActorScope;
 let technician: ActorScope;
@@ -110,6 +111,7 @@ describe("every table", () => {
     "membership",
     "program",
     "audit_event",
+    "audit_seal",
   ])("%s shows nothing to nobody", async (table) => {
     expect(await forgetful(null, `select * from "${table}"`)).toEqual([]);
   });
@@ -160,6 +162,10 @@ describe("what a person keeps for themselves", () => {
     favourite: ["kind, record_id, at", "'film', gen_random_uuid(), now()"],
     saved_filter: ["list, name, query, at", "'/films', 'metals', 'kind=metal', now()"],
     preference: ["value, at", "'{}', now()"],
+    api_answer: [
+      "caller, key, request_hash, headers, body, at",
+      "gen_random_uuid(), 'k', 'x', '{}', '', now()",
+    ],
     mail_choice: ["value, unsubscribe_token, at", "'{}', gen_random_uuid()::text, now()"],
   };
   const insert = (table: string, person: string) => {

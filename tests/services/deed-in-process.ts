@@ -24,6 +24,7 @@ export type FloorDeed = { scope: ActorScope; id: string } & (
   | { kind: "hold"; form: Omit<HoldForm, "intent"> }
   | { kind: "stop"; form: Omit<StopForm, "intent"> }
   | { kind: "clear"; form: Omit<ClearForm, "intent"> }
+  | { kind: "report"; form: Record<string, string> }
 );
 
 async function workOnLot(deed: FloorDeed): Promise<void> {
@@ -34,6 +35,12 @@ async function workOnLot(deed: FloorDeed): Promise<void> {
   } else if (deed.kind === "enter") {
     const { enter } = await import("#app/services/floor/entries.server.ts");
     stored(await enter(scope, id, deed.form));
+  } else if (deed.kind === "report") {
+    const { reportFromFloor } = await import("#app/services/incidents/report-from-floor.server.ts");
+    const form = new FormData();
+    for (const [name, value] of Object.entries(deed.form)) form.set(name, value);
+    const { outcome } = await reportFromFloor(scope, id, form, { files: [], faults: [] });
+    if (outcome === "refused") throw new Error("the report was refused");
   } else {
     const { clearBlock, holdLot, stopStep } = await import("#app/services/floor/hold-and-stop.server.ts");
     if (deed.kind === "hold") await holdLot(scope, id, deed.form);

@@ -14,6 +14,7 @@ const LAST_WRITTEN: Record<FloorDeed["kind"], WrittenTable> = {
   stop: "mail_outbox",
   hold: "mail_outbox",
   clear: "step_stop",
+  report: "mail_outbox",
 };
 
 const database = useDatabase({ demo: true });
@@ -30,12 +31,14 @@ beforeAll(async () => {
 
 /** Everything that a deed on a lot leaves behind. */
 async function traces() {
-  const [row] = await asOwner<Record<"pins" | "entries" | "blocks" | "cleared" | "mails" | "events" | "jobs", number>>(
+  const [row] = await asOwner<
+    Record<"pins" | "entries" | "blocks" | "cleared" | "incidents" | "mails" | "events" | "jobs", number>
+  >(
     database,
     `select (select count(*)::int from lot_sheet) as pins, (select count(*)::int from floor_entry) as entries,
             (select count(*)::int from lot_hold) + (select count(*)::int from step_stop) as blocks,
             (select count(cleared_at)::int from lot_hold) + (select count(cleared_at)::int from step_stop) as cleared,
-            (select count(*)::int from mail_outbox) as mails, (select count(*)::int from audit_event) as events,
+            (select count(*)::int from incident) as incidents, (select count(*)::int from mail_outbox) as mails, (select count(*)::int from audit_event) as events,
             (select count(*)::int from graphile_worker.jobs) as jobs`,
   );
   if (!row) throw new Error("nothing was counted");
@@ -48,12 +51,12 @@ const twice = () =>
 /** Kills the deed, then does it: only then it is there, and once. What has its own id is sent once more and adds nothing. */
 async function killedThenDone(deed: FloorDeed, adds: Partial<Awaited<ReturnType<typeof traces>>>): Promise<void> {
   const before = await traces();
-  const tells = deed.kind === "hold" || deed.kind === "stop";
+  const tells = deed.kind === "hold" || deed.kind === "stop" || deed.kind === "report";
   await killedBeforeItsEnd(deed, LAST_WRITTEN[deed.kind]);
   expect(await traces()).toEqual(before);
   await done(deed);
   const after = await traces();
-  for (const key of ["pins", "entries", "blocks", "cleared"] as const)
+  for (const key of ["pins", "entries", "blocks", "cleared", "incidents"] as const)
     expect(after[key], key).toBe(before[key] + (adds[key] ?? 0));
   expect(after.mails > before.mails, "mails").toBe(tells);
   if (tells || deed.kind === "enter") {
@@ -64,7 +67,7 @@ async function killedThenDone(deed: FloorDeed, adds: Partial<Awaited<ReturnType<
 }
 
 test(
-  "whoever is killed while putting a lot on a sheet, entering, holding, stopping or clearing has done nothing",
+  "whoever is killed while putting a lot on a sheet, entering, holding, stopping, clearing or reporting has done nothing",
   { timeout: 240_000 },
   async () => {
     const revision = await releaseFirstFlow(database, "tern");
@@ -101,6 +104,30 @@ test(
     await killedThenDone(
       { kind: "clear", scope: owner, id, form: { block: stop, kind: "stop", words: "Seal changed" } },
       { cleared: 1 },
+    );
+    const [pinned] = await asOwner<{ assessment: string }>(
+      database,
+      "select assessment_id as assessment from sheet_revision where id = ?",
+      [revision],
+    );
+    await killedThenDone(
+      {
+        kind: "report",
+        scope: engineer,
+        id,
+        form: {
+          id: randomUUID(),
+          assessment: pinned?.assessment ?? "",
+          leg: "0",
+          step: "2",
+          kind: "crack",
+          severity: "wafer lost",
+          affected: "1",
+          broken: "1",
+          words: "Cracked when it was lifted",
+        },
+      },
+      { incidents: 1 },
     );
   },
 );

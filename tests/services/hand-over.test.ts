@@ -130,6 +130,11 @@ describe("a place that is handed over", () => {
     const tern = (await rows(lead)).find(({ program }) => program === "Tern");
     expect(await handOversToTake(technician)).toBe(0);
     expect(await handOversToTake(lead)).toBe(2);
+    const { todayView } = await import("#app/services/today.server.ts");
+    expect((await todayView(technician)).lots.toTake.total).toBe(0);
+    const waits = (await todayView(lead)).lots.toTake;
+    expect(waits.total).toBe(2);
+    expect(waits.rows[0]?.words).toMatch(/^\d lots?, given by /);
     expect(await refusal(takeOver(technician, tern?.id, ""))).toContain("Somebody of the next shift takes it");
     await takeOver(lead, tern?.id, "All there");
     await takeOver(lead, tern?.id, "Pressed twice");

@@ -42,6 +42,7 @@ beforeAll(async () => {
 
 async function report(changed: Record<string, unknown>): Promise<void> {
   const values = incidentSchema.parse({
+    id: randomUUID(),
     assessment,
     leg: 0,
     step: 1,

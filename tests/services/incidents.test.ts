@@ -1,3 +1,4 @@
+import { randomUUID } from "node:crypto";
 import sharp from "sharp";
 import { beforeAll, describe, expect, test } from "vitest";
 import { incidentSchema, type IncidentValues } from "#app/schemas/incident-form.ts";
@@ -40,6 +41,7 @@ beforeAll(async () => {
 /** A report as the form sends it. */
 function report(changed: Record<string, unknown> = {}): IncidentValues {
   const read = incidentSchema.safeParse({
+    id: randomUUID(),
     assessment: tern,
     leg: 0,
     step: 9,
@@ -65,6 +67,7 @@ const faultsOf = (changed: Record<string, unknown>) => {
   return read.success ? [] : read.error.issues.map(({ path }) => path.join("."));
 };
 const sent = {
+  id: randomUUID(),
   assessment: "11111111-1111-4111-8111-111111111111",
   leg: 0,
   step: 9,
@@ -125,6 +128,15 @@ describe("a report", () => {
     expect(incident.prediction).toMatchObject({ stepTitle: step?.title, silicon: step?.silicon });
     expect(incident.prediction.films).toMatch(/^device side: /);
     expect((await look(engineer, await store(lead, report({ wafer: "" })))).number).toBe("TERN-I002");
+  });
+
+  test("that comes twice is one; nobody else takes its number", LONG, async () => {
+    const once = report({ lot: "T-0600" });
+    const id = await store(technician, once);
+    expect(await store(technician, once)).toBe(id);
+    const numbers = await asOwner(database, "select number from incident where id = ?", [id]);
+    expect(numbers).toHaveLength(1);
+    await expect(store(lead, once)).rejects.toEqual(status(409));
   });
 
   test("finds the lot and the wafer that are known", LONG, async () => {

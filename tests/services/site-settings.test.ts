@@ -2,6 +2,7 @@ import { beforeAll, beforeEach, expect, test } from "vitest";
 import type { ActorScope } from "#app/server/scope.server.ts";
 import { scopeOfPerson } from "#tests/db/people.ts";
 import { asOwner, useDatabase } from "#tests/db/test-database.ts";
+import { releaseFirstFlow } from "./lot-on-sheet.ts";
 
 const database = useDatabase({ demo: true });
 const settings = () => import("#app/services/site-settings.server.ts");
@@ -89,3 +90,41 @@ test("is refused to everybody else, by the service and by the database", async (
     inScope(administrator, (em) => em.execute("insert into site_setting select * from site_setting")),
   ).rejects.toThrow(/denied/);
 });
+
+test(
+  "prints older than their program keeps them go, younger ones stay, and the trail says how many went",
+  { timeout: 60_000 },
+  async () => {
+    const { forgetOldPrints, printRetention, savePrintRetention } =
+      await import("#app/services/sheets/print-retention.server.ts");
+    await releaseFirstFlow(database, "tern");
+    const printed = (age: string) =>
+      asOwner(
+        database,
+        `insert into sheet_print (id, program_id, revision_id, file_id, place, created_at, created_by_id)
+       select gen_random_uuid(), f.program_id, f.revision_id, f.id, 'bench', now() - ?::interval, ?
+         from sheet_file f`,
+        [age, owner.actor.id],
+      );
+    await printed("4 years");
+    await printed("1 month");
+    const count = async () =>
+      (await asOwner<{ count: number }>(database, "select count(*)::int from sheet_print"))[0]?.count ?? 0;
+    const all = await count();
+    expect(all).toBeGreaterThan(1);
+    expect(await forgetOldPrints()).toBe(0);
+    const tern = (await printRetention(administrator)).find(({ name }) => name === "Tern");
+    await savePrintRetention(administrator, [{ program: tern?.id ?? "", years: 3 }]);
+    expect(await forgetOldPrints()).toBe(all / 2);
+    expect(await count()).toBe(all / 2);
+    const trail = await asOwner<{ from: { count: number } }>(
+      database,
+      `select "from" from audit_event where subject = 'prints of sheets' and program_id = ?`,
+      [tern?.id],
+    );
+    expect(trail.map(({ from }) => from.count)).toEqual([all / 2]);
+    await expect(savePrintRetention(owner, [{ program: tern?.id ?? "", years: 1 }])).rejects.toMatchObject({
+      init: { status: 403 },
+    });
+  },
+);

@@ -1,6 +1,6 @@
 import { Swatch } from "#app/components/drawings/Swatch.tsx";
 import { entryWords } from "#app/lib/floor/entry-words.ts";
-import { floorPath } from "#app/lib/floor/floor-path.ts";
+import { floorPath, type FloorDeed } from "#app/lib/floor/floor-path.ts";
 import { EntryFields } from "./EntryFields.tsx";
 import { FloorForm } from "./FloorForm.tsx";
 import type { FloorStepProps } from "./FloorStepPage.tsx";
@@ -12,7 +12,7 @@ const ACTION =
 export function FloorActions(props: FloorStepProps & { blocked: boolean }) {
   const { lot, sheet, step, deed } = props;
   const last = sheet.entries.find(({ step: at, content }) => at === step.number && content.kind === "measured");
-  const to = (deed: "measure" | "observe" | "stop" | "hold") => floorPath(lot.id, step.number, sheet.leg, deed);
+  const to = (deed: FloorDeed) => floorPath(lot.id, step.number, sheet.leg, deed);
   return (
     <div
       role="group"
@@ -37,12 +37,12 @@ export function FloorActions(props: FloorStepProps & { blocked: boolean }) {
           Write an observation
         </a>
         <a
-          href={reportPath(props)}
+          href={to("incident")}
           className={`${ACTION} border-b border-line tablet:px-4 ${lot.mayHold ? "" : "tablet:col-span-2"}`}
         >
           Report an incident
           <span className={`text-lead font-normal text-quiet ${lot.mayHold ? "tablet:hidden" : ""}`}>
-            Crack, chip, slip or drop; needs the connection
+            Crack, chip, slip or drop
           </span>
         </a>
         {lot.mayHold && (
@@ -65,13 +65,6 @@ export function FloorActions(props: FloorStepProps & { blocked: boolean }) {
       </a>
     </div>
   );
-}
-
-/** The form of a report, which knows where the lot is. */
-function reportPath({ lot, sheet, step }: FloorStepProps): string {
-  const asked = new URLSearchParams({ assessment: sheet.pin.assessment, step: String(step.number), lot: lot.id });
-  if (sheet.leg > 0) asked.set("leg", String(sheet.leg));
-  return `/incidents/new?${asked.toString()}`;
 }
 
 /** Starts the step, or says that it is done; where neither can be, why, and the way there. */

@@ -11,8 +11,11 @@ import { EntryFields } from "./EntryFields.tsx";
 import { FloorForm } from "./FloorForm.tsx";
 import type { FloorStepProps } from "./FloorStepPage.tsx";
 
-interface Props extends FloorStepProps {
-  deed: FloorDeed;
+/** An incident has a form of its own. */
+type Deed = Exclude<FloorDeed, "incident">;
+
+interface Props extends Omit<FloorStepProps, "deed"> {
+  deed: Deed;
   lastResult: SubmissionResult<string[]> | null;
 }
 
@@ -33,7 +36,7 @@ type Values = Record<
 >;
 type Fields = { [Name in keyof Values]: FieldMetadata<string> };
 
-const TITLES: Record<FloorDeed, { title: string; button: string; about: string }> = {
+const TITLES: Record<Deed, { title: string; button: string; about: string }> = {
   measure: {
     title: "Record a reading",
     button: "Save the reading",
@@ -105,7 +108,7 @@ export function FloorDeedForm({ lot, sheet, step, deed, newId, lastResult }: Pro
   );
 }
 
-function DeedFields({ deed, fields }: { deed: FloorDeed; fields: Fields }): ReactNode {
+function DeedFields({ deed, fields }: { deed: Deed; fields: Fields }): ReactNode {
   const count = (
     <LineField field={fields.count} label="How many wafers" hint="May stay empty." input={{ inputMode: "numeric" }} />
   );

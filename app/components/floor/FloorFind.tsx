@@ -3,20 +3,38 @@ import { Form } from "react-router";
 import type { FoundLot, FoundLots } from "#app/schemas/floor-view.ts";
 import { CameraFinder } from "./CameraFinder.tsx";
 import { FloorHead } from "./FloorHead.tsx";
+import { KeptLine } from "./KeptLine.tsx";
+import { useFloorWorker } from "./use-floor-worker.ts";
+
+interface Props {
+  found: FoundLots;
+  person: { id: string; name: string };
+  /** hand-overs that somebody has to take */
+  waiting: number;
+  /** ISO, when all this was so */
+  checkedAt: string;
+}
+
+const PATHS = ["/floor", "/floor/hand-overs"];
 
 /**
  * Finds a lot by its name, typed or read by a hand-held scanner, which types and presses enter: the field has the focus, and a name that
  * is a lot's opens it at once.
  */
-export function FloorFind({ found, person, waiting }: { found: FoundLots; person: string; waiting: number }) {
+export function FloorFind({ found, person, waiting, checkedAt }: Props) {
   const id = useId();
   const { query, rows, mine } = found;
+  useFloorWorker(PATHS);
   return (
     <>
-      <FloorHead person={person} />
+      <FloorHead person={person.name} personId={person.id} />
       <main id="main" className="mx-auto max-w-240 px-4 py-6 tablet:px-6">
+        <KeptLine
+          checkedAt={checkedAt}
+          what="Only lots that were opened on this device in the last 12 hours can be opened."
+        />
         <h1 className="text-answer font-medium">Find a lot</h1>
-        <Form method="get" className="mt-4 flex flex-wrap items-end gap-3">
+        <Form method="get" discover="none" className="mt-4 flex flex-wrap items-end gap-3">
           <div className="min-w-60 flex-1">
             <label htmlFor={id} className="block text-lead">
               Lot, typed or scanned

@@ -3,6 +3,8 @@ import { Form, useSubmit } from "react-router";
 import { newId, useOutbox } from "./use-floor-outbox.ts";
 
 interface Props extends Pick<FormHTMLAttributes<HTMLFormElement>, "id" | "className" | "noValidate"> {
+  /** where the form takes files */
+  encType?: "multipart/form-data";
   action: string;
   /** what it says, in a few words, while it waits to be sent */
   words: string;
@@ -11,33 +13,40 @@ interface Props extends Pick<FormHTMLAttributes<HTMLFormElement>, "id" | "classN
   children: ReactNode;
 }
 
+const keepsPages = () => "serviceWorker" in navigator && navigator.serviceWorker.controller !== null;
+
 /**
  * A form of the floor. It is kept on the device before it is sent, and until the server has it, so that a lost connection loses nothing;
  * without scripts it is sent as any form is.
  */
-export function FloorForm({ action, words, next, children, ...rest }: Props) {
+export function FloorForm({ action, words, next, children, encType, ...rest }: Props) {
   const known = useOutbox();
   const submit = useSubmit();
   const [busy, setBusy] = useState(false);
   const send = async (form: FormData) => {
-    if (!known || typeof indexedDB === "undefined") return submit(form, { method: "post", action });
+    const asForm = () => submit(form, { method: "post", action, ...(encType && { encType }) });
+    if (!known || typeof indexedDB === "undefined") return asForm();
     const { outbox, person, lot } = known;
     setBusy(true);
     const asked = String(form.get("id") ?? "");
     const id = asked === "" || outbox.queued.some((entry) => entry.id === asked) ? newId() : asked;
     form.set("id", id);
-    const fields = [...form].map(([name, value]): [string, string] => [name, typeof value === "string" ? value : ""]);
+    // A file field that was left empty comes as a file without name and content.
+    const fields = [...form].filter(([, value]) => typeof value === "string" || value.size > 0);
     const at = new Date().toISOString();
     // A device whose store is full or broken keeps nothing: then it goes out as a form, which says whether it was taken.
     const outcome = await outbox.enter({ id, person, lot, words, at, fields, refused: null }).catch(() => null);
     if (outcome === null) {
       setBusy(false);
-      return submit(form, { method: "post", action });
+      return asForm();
     }
-    if (outcome === "stored") return window.location.assign(next);
+    const { pathname, search } = window.location;
+    // What waits leads on too, so that it is not entered twice; without the pages that this device keeps there is nowhere to go.
+    const goesOn = outcome === "stored" || (outcome === "waits" && next !== pathname + search && keepsPages());
+    if (goesOn) return window.location.assign(next);
     setBusy(false);
     // Sent once more as a form of the page, which then says beside its fields what is wrong.
-    if (outcome === "refused") await submit(form, { method: "post", action });
+    if (outcome === "refused") await asForm();
   };
   return (
     <Form
@@ -45,6 +54,7 @@ export function FloorForm({ action, words, next, children, ...rest }: Props) {
       // It leads nowhere that the page has not got, and the device may have no connection to ask.
       discover="none"
       method="post"
+      encType={encType}
       action={action}
       aria-busy={busy}
       onSubmit={(event) => {

@@ -20,7 +20,7 @@ export function FloorHead({ person, personId, children }: Props) {
       </a>
       {children}
       <span className="ml-auto text-quiet">{person}</span>
-      <a href="/" className="link flex min-h-11 items-center">
+      <a href="/" className="link flex min-h-11 items-center print:hidden">
         Desk
       </a>
     </header>

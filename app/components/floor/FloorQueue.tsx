@@ -22,8 +22,8 @@ export function FloorQueue({ outbox: { queued, sent, drop, observe }, here }: { 
           className="mb-4 border-2 border-caution bg-raised p-4 text-lead"
         >
           <p className="font-semibold">
-            {waiting.length === 1 ? "1 entry waits" : `${waiting.length} entries wait`} for the connection. A hold or
-            stop tells nobody before it is sent: call.
+            {waiting.length === 1 ? "1 entry waits" : `${waiting.length} entries wait`} for the connection. A hold, a
+            stop or an incident tells nobody before it is sent: call.
           </p>
           <ul className="list-disc pl-5">
             {waiting.map(({ id, words, at }) => (

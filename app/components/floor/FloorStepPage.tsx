@@ -9,6 +9,7 @@ import { FloorBlocks } from "./FloorBlocks.tsx";
 import { FloorCautions } from "./FloorCautions.tsx";
 import { FloorClocks } from "./FloorClocks.tsx";
 import { FloorDeedForm } from "./FloorDeedForm.tsx";
+import { FloorIncidentForm } from "./FloorIncidentForm.tsx";
 import { FloorOnDevice } from "./FloorOnDevice.tsx";
 import { FloorRefusal } from "./FloorRefusal.tsx";
 import { FloorSheetHead } from "./FloorSheetHead.tsx";
@@ -26,7 +27,7 @@ export interface FloorStepProps {
 /** One step of a lot: what hands do, what must not happen, and the few things that can be said of it. */
 export function FloorStepPage(props: FloorStepProps & Answered) {
   return (
-    <FloorOnDevice lot={props.lot}>
+    <FloorOnDevice lot={props.lot} step={props.step.number}>
       {(lot, notices) => <StepScreen {...props} lot={lot} sheet={lot.sheet ?? props.sheet} notices={notices} />}
     </FloorOnDevice>
   );
@@ -54,6 +55,8 @@ function StepScreen({ answer, notices, ...props }: FloorStepProps & Answered & {
               <FloorClocks clocks={sheet.clocks} now={lot.checkedAt} />
               <Notes sheet={sheet} step={step} />
             </>
+          ) : deed === "incident" ? (
+            <FloorIncidentForm {...props} lastResult={answer?.lastResult ?? null} />
           ) : (
             <FloorDeedForm key={deed} {...props} deed={deed} lastResult={answer?.lastResult ?? null} />
           )}

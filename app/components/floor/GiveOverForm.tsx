@@ -44,7 +44,7 @@ export function GiveOverForm({ lots, places, given, person, lastResult }: Props)
             </a>
           </p>
         ) : (
-          <Form method="post" id={form.id} noValidate className="floor-form mt-3 space-y-3 text-lead">
+          <Form method="post" discover="none" id={form.id} noValidate className="floor-form mt-3 space-y-3 text-lead">
             <FormHead lastResult={lastResult} stands="Nothing is handed over yet" />
             <p>
               Where each lot is in its flow, its clocks, its holds and stops and the odd readings of the last 12 h are

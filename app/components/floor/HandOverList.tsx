@@ -3,34 +3,41 @@ import { Form } from "react-router";
 import { minuteOf } from "#app/lib/minute-of.ts";
 import type { HandOverRow } from "#app/schemas/hand-over.ts";
 import { FloorHead } from "./FloorHead.tsx";
+import { KeptLine } from "./KeptLine.tsx";
 
 interface Props {
   query: string;
   rows: readonly HandOverRow[];
   /** whether one has just been given */
   given: boolean;
-  person: string;
+  person: { id: string; name: string };
+  /** ISO, when all this was so */
+  checkedAt: string;
 }
 
 /** What was handed over at which place: first what waits to be taken, then what was. */
-export function HandOverList({ query, rows, given, person }: Props) {
+export function HandOverList({ query, rows, given, person, checkedAt }: Props) {
   const id = useId();
   const waiting = rows.filter(({ taken, replaced }) => taken === null && !replaced);
   const past = rows.filter((row) => !waiting.includes(row));
   return (
     <>
-      <FloorHead person={person} />
+      <FloorHead person={person.name} personId={person.id} />
       <main id="main" className="mx-auto max-w-240 px-4 py-6 tablet:px-6">
+        <KeptLine checkedAt={checkedAt} what="A place is handed over and taken with a connection, or on paper." />
         <h1 className="text-answer font-medium">Hand-overs</h1>
         {given && (
           <p role="status" className="mt-3 border-l-4 border-clear pl-3 text-lead">
             The place is handed over. You answer for it until somebody of the next shift has taken it.
           </p>
         )}
-        <a href="/floor/hand-overs/new" className="btn btn-primary mt-4 min-h-27 w-full text-figure tablet:w-100">
+        <a
+          href="/floor/hand-overs/new"
+          className="btn btn-primary fresh-only mt-4 min-h-27 w-full text-figure tablet:w-100"
+        >
           Hand a place over
         </a>
-        <Form method="get" className="mt-4 flex flex-wrap items-end gap-3">
+        <Form method="get" discover="none" className="mt-4 flex flex-wrap items-end gap-3">
           <div className="min-w-60 flex-1">
             <label htmlFor={id} className="block text-lead">
               Place

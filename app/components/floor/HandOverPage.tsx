@@ -8,11 +8,12 @@ import { minuteOf } from "#app/lib/minute-of.ts";
 import type { HandOverLot, HandOverView } from "#app/schemas/hand-over.ts";
 import { FloorClocks } from "./FloorClocks.tsx";
 import { FloorHead } from "./FloorHead.tsx";
+import { KeptLine } from "./KeptLine.tsx";
 import { stateOf } from "./HandOverList.tsx";
 
 interface Props {
   handOver: HandOverView;
-  person: string;
+  person: { id: string; name: string };
   /** ISO, for the clocks */
   now: string;
   lastResult: SubmissionResult<string[]> | null | undefined;
@@ -23,8 +24,9 @@ export function HandOverPage({ handOver, person, now, lastResult }: Props) {
   const { place, program, by, at, remark, content, moved, mayTake, takenRemark, taken } = handOver;
   return (
     <>
-      <FloorHead person={person} />
+      <FloorHead person={person.name} personId={person.id} />
       <main id="main" className="mx-auto max-w-240 px-4 py-6 tablet:px-6">
+        <KeptLine checkedAt={now} what="It is taken with a connection, or on paper." />
         <h1 className="text-answer font-medium wrap-anywhere">{place}</h1>
         <p className="text-lead text-quiet">
           {program}. Given by {by}, {minuteOf(at)}.
@@ -43,7 +45,12 @@ export function HandOverPage({ handOver, person, now, lastResult }: Props) {
             <LeftLot key={lot.id} lot={lot} now={now} moved={moved.includes(lot.name)} />
           ))}
         </ul>
-        {mayTake && <TakeOver lastResult={lastResult} />}
+        {!taken && <p className="mt-10 hidden text-lead print:block">Taken over by, day and time in UTC:</p>}
+        {mayTake && (
+          <div className="fresh-only">
+            <TakeOver lastResult={lastResult} />
+          </div>
+        )}
         <p className="mt-5 print:hidden">
           <a href="/floor/hand-overs" className="btn min-h-14 text-lead">
             All hand-overs
@@ -93,7 +100,7 @@ function LeftLot({ lot, now, moved }: { lot: HandOverLot; now: string; moved: bo
 function TakeOver({ lastResult }: Pick<Props, "lastResult">) {
   const [form, fields] = useRecordForm<{ remark: string }>({ id: "take-over", lastResult });
   return (
-    <Form method="post" id={form.id} noValidate className="floor-form mt-5 space-y-2 print:hidden">
+    <Form method="post" discover="none" id={form.id} noValidate className="floor-form mt-5 space-y-2 print:hidden">
       <FormHead lastResult={lastResult} stands="The place is not taken yet" />
       <p className="text-lead">
         Look at each lot before. You answer for the place from then on; your name and the time are kept beside theirs.

@@ -1,8 +1,11 @@
 import { useEffect } from "react";
 
+/** All of the floor, its first page included, which has no slash at its end. */
+const SCOPE = "/floor";
+
 /**
- * Has the sheets of this lot kept on the device, so that they can be read through a lost connection.
- * @param paths of its pages
+ * Has pages of the floor kept on the device, so that they can be read through a lost connection.
+ * @param paths of the pages
  */
 export function useFloorWorker(paths: readonly string[]): void {
   const all = paths.join(" ");
@@ -10,7 +13,7 @@ export function useFloorWorker(paths: readonly string[]): void {
     if (!import.meta.env.PROD || !("serviceWorker" in navigator)) return;
     if (document.documentElement.dataset["keptAt"] !== undefined) return;
     navigator.serviceWorker
-      .register("/floor-worker.js", { scope: "/floor/" })
+      .register("/floor-worker.js", { scope: SCOPE })
       .then(activeWorker)
       .then((worker) => worker?.postMessage({ keep: all.split(" ") }))
       .catch(() => undefined);

@@ -11,6 +11,7 @@ import { PhotoField } from "./PhotoField.tsx";
 import { SpotFields } from "./SpotFields.tsx";
 
 type Values = {
+  id: string;
   assessment: string;
   leg: string;
   step: string;
@@ -46,6 +47,7 @@ export function ReportForm({ ground, lastResult }: Props) {
         <FormHead lastResult={lastResult} />
       </div>
       <input {...getInputProps(fields.assessment, { type: "hidden" })} key={fields.assessment.key} />
+      <input {...getInputProps(fields.id, { type: "hidden" })} key={fields.id.key} />
       <div className="grid wide:grid-cols-2">
         <fieldset className="min-w-0 p-4 tablet:p-6">
           <legend className="float-left mb-3 w-full font-semibold">What happened</legend>

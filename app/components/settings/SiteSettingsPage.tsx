@@ -1,9 +1,11 @@
-import { Form } from "react-router";
+import { Form, Link } from "react-router";
 import { Choices } from "#app/components/forms/Choices.tsx";
 import { SubmitButton } from "#app/components/forms/SubmitButton.tsx";
 import { PageHead } from "#app/components/layout/PageHead.tsx";
 import { Notice } from "#app/components/ui/Notice.tsx";
+import { SelectField } from "#app/components/ui/SelectField.tsx";
 import type { Paper } from "#app/lib/paper-size.ts";
+import { PRINT_YEARS, type PrintRetention } from "#app/schemas/print-retention.ts";
 import type { RecordStamp } from "#app/schemas/record-stamp.ts";
 
 const PAPER_WORDS: Record<Paper, string> = { a4: "A4, 210 × 297 mm", letter: "Letter, 8.5 × 11 inches" };
@@ -11,17 +13,26 @@ const PAPER_WORDS: Record<Paper, string> = { a4: "A4, 210 × 297 mm", letter: "L
 interface Props {
   paper: Paper;
   stamp: RecordStamp;
+  retention: readonly PrintRetention[];
   saved: boolean;
   /** what somebody else has saved in the meantime, and what this person had chosen */
   refused: { reason: string; version: number; chosen: Paper } | undefined;
 }
 
 /** What holds for the whole site. */
-export function SiteSettingsPage({ paper, stamp, saved, refused }: Props) {
+export function SiteSettingsPage({ paper, stamp, retention, saved, refused }: Props) {
   const { version, updatedAt, updatedBy } = stamp;
   return (
     <>
-      <PageHead title="Site settings" remark="For everybody on this site" />
+      <PageHead
+        title="Site settings"
+        remark="For everybody on this site"
+        actions={
+          <Link to="/audit" className="btn">
+            Audit trail
+          </Link>
+        }
+      />
       {refused && (
         <Notice kind="error" title="Not saved: somebody else saved first">
           {refused.reason}
@@ -42,6 +53,48 @@ export function SiteSettingsPage({ paper, stamp, saved, refused }: Props) {
           </span>
         </div>
       </Form>
+      <PrintsKept retention={retention} />
     </>
+  );
+}
+
+const YEARS = PRINT_YEARS.map((years) => ({ value: years, label: years === "1" ? "1 year" : `${years} years` }));
+
+/** How long each program keeps who took a sheet out to print, when and for which place. */
+function PrintsKept({ retention }: Pick<Props, "retention">) {
+  return (
+    <section className="mt-8" aria-labelledby="prints">
+      <h2 id="prints" className="font-semibold">
+        Who printed sheets
+      </h2>
+      <p className="mb-3 max-w-160 text-quiet">
+        The list of prints names people and places. What is older than this goes every night; the audit trail keeps how
+        many went. The sheets themselves are kept for good.
+      </p>
+      {retention.length === 0 ? (
+        <p className="text-quiet">There is no program yet.</p>
+      ) : (
+        <Form method="post" className="frame max-w-160">
+          <input type="hidden" name="intent" value="prints" />
+          <div className="grid gap-3 p-4 tablet:grid-cols-2 tablet:px-6">
+            {retention.map(({ id, name, years }, index) => (
+              <div key={id}>
+                <input type="hidden" name={`kept[${index}].program`} value={id} />
+                <SelectField
+                  name={`kept[${index}].years`}
+                  label={name}
+                  options={YEARS}
+                  blank="For good"
+                  defaultValue={years === null ? "" : String(years)}
+                />
+              </div>
+            ))}
+          </div>
+          <div className="border-t border-line p-4 tablet:px-6">
+            <SubmitButton busy="Saving">Save how long prints are kept</SubmitButton>
+          </div>
+        </Form>
+      )}
+    </section>
   );
 }

@@ -1,5 +1,5 @@
 import { lazy, memo, Suspense, useMemo, type ReactNode } from "react";
-import { useInBrowser } from "#app/components/ui/use-in-browser.ts";
+import { OnceNear } from "#app/components/ui/OnceNear.tsx";
 import type { SiteLimits } from "#app/engine/rules/limits.ts";
 import type { ChartOthers } from "#app/lib/stack-chart.ts";
 import type { StackDraft } from "#app/lib/stack-draft.ts";
@@ -11,7 +11,7 @@ import { FilmForces } from "./FilmForces.tsx";
 import { StackChart } from "./StackChart.tsx";
 import { StackWorkings } from "./StackWorkings.tsx";
 
-// Only scripts draw wafers.
+// Only scripts draw wafers, for who scrolls that far.
 const WarpSpread = lazy(() => import("./WarpSpread.tsx").then((module) => ({ default: module.WarpSpread })));
 
 interface Props {
@@ -26,7 +26,6 @@ interface Props {
 /** What follows from the stack besides the answer: the curve, the models side by side, what is assumed, the calculations. */
 export const StackFindings = memo(function StackFindings(props: Props) {
   const { name, draft, panel, overlay, limits, options } = props;
-  const inBrowser = useInBrowser();
   const names = useMemo(() => turnFront(draft.layers).map((layer) => layer.name), [draft]);
   if (!panel) return <div className="border-t border-line px-4 py-4 tablet:px-6">{options}</div>;
   return (
@@ -34,11 +33,11 @@ export const StackFindings = memo(function StackFindings(props: Props) {
       <StackChart name={name} panel={panel} overlay={overlay} limits={limits} options={options} />
       <FilmForces estimated={panel.room} names={names} />
       <BowModels estimated={panel.room} />
-      {inBrowser && (
+      <OnceNear className="min-h-30 scriptless:hidden">
         <Suspense>
           <WarpSpread estimated={panel.room} />
         </Suspense>
-      )}
+      </OnceNear>
       <AssumedInputs draft={draft} />
       <StackWorkings estimated={panel.room} names={names} />
     </>

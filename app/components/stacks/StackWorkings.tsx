@@ -1,8 +1,9 @@
-import { lazy, memo, Suspense, useState, type ReactNode } from "react";
+import { lazy, memo, Suspense, useEffect, useRef, useState, type ReactNode } from "react";
+import { useInBrowser } from "#app/components/ui/use-in-browser.ts";
 import type { Estimated } from "#app/lib/stack-words.ts";
 import { useWorkings, type Workings } from "./use-workings.ts";
 
-// Without scripts the server writes them; with scripts their drawing is taken over once it has come.
+// Without scripts the server writes them; with scripts they are drawn for who unfolds them.
 const WorkingView = lazy(() =>
   import("#app/components/working/WorkingView.tsx").then((module) => ({ default: module.WorkingView })),
 );
@@ -15,13 +16,19 @@ interface Props {
 
 /** The calculations behind the figures, folded away until asked for: what was typed since is worked out only then. */
 export const StackWorkings = memo(function StackWorkings({ estimated, names }: Props) {
+  const inBrowser = useInBrowser();
   const [asked, setAsked] = useState(false);
+  const section = useRef<HTMLElement>(null);
+  useEffect(() => {
+    // Unfolded before the scripts were there.
+    if (section.current?.querySelector("details[open]")) setAsked(true);
+  }, []);
   const { workings, failed } = useWorkings(estimated, asked);
   const fold = (words: string, of: (workings: Workings) => ReactNode) => (
     <details className="mt-1" onToggle={(event) => event.currentTarget.open && setAsked(true)}>
       <summary className="link w-fit cursor-pointer">{words}</summary>
       <div className="mt-2 mb-4">
-        {workings ? (
+        {workings && (asked || !inBrowser) ? (
           <Suspense>{of(workings)}</Suspense>
         ) : (
           <p className={failed ? "text-stop" : "text-quiet"} role="status">
@@ -32,7 +39,7 @@ export const StackWorkings = memo(function StackWorkings({ estimated, names }: P
     </details>
   );
   return (
-    <section className="border-t border-line px-4 py-3 tablet:px-6" aria-labelledby="workings">
+    <section ref={section} className="border-t border-line px-4 py-3 tablet:px-6" aria-labelledby="workings">
       <h3 id="workings" className="font-semibold">
         Workings
       </h3>

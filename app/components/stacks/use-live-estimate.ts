@@ -37,8 +37,8 @@ export function useLiveEstimate(wanted: PanelRequests | null, served: StackPanel
   const failed = failure !== null && failure.key === key;
   const ask = key !== null && key !== shown && !failed ? key : null;
   useEffect(() => {
-    // With the first look into a field, so that it is there before it is needed; whether it came shows when it is.
-    const fetchEngine = () => void engine().catch(() => undefined);
+    // After the first look into a field has been painted, so that it is there before it is needed; whether it came shows when it is.
+    const fetchEngine = () => void setTimeout(() => void engine().catch(() => undefined), PAUSE);
     document.addEventListener("focusin", fetchEngine, { once: true });
     return () => document.removeEventListener("focusin", fetchEngine);
   }, []);

@@ -7,6 +7,13 @@ export function LotsThatWait({ lots }: { lots: TodayLots }) {
   return (
     <>
       <Lots title="Held and stopped" remark="longest first" group={lots.blocked} act="Clear it" />
+      <Lots
+        title="Handed over"
+        remark="the last shift answers for it until it is taken"
+        group={lots.toTake}
+        act="Take it over"
+        all="/floor/hand-overs"
+      />
       <Lots title="On old sheets" remark="nothing is started by them" group={lots.toMove} act="Move it" />
     </>
   );
@@ -18,19 +25,21 @@ interface Props {
   group: TodayGroup<TodayLot>;
   /** what somebody does who may */
   act: string;
+  /** where all of them are */
+  all?: string;
 }
 
-function Lots({ title, remark, group, act }: Props) {
+function Lots({ title, remark, group, act, all = "/lots" }: Props) {
   if (group.total === 0) return null;
   return (
-    <TodaySection title={title} remark={remark} more={{ count: group.total - group.rows.length, to: "/lots" }}>
+    <TodaySection title={title} remark={remark} more={{ count: group.total - group.rows.length, to: all }}>
       <ul>
-        {group.rows.map(({ id, lotId, title: what, words, program, at, mine }) => (
+        {group.rows.map(({ id, path, title: what, words, program, at, mine }) => (
           <TodayRow
             key={id}
             title={what}
             state={<span className="text-quiet">since {at.slice(0, 10)}</span>}
-            action={{ words: mine ? act : "See the lot", to: `/lots/${lotId}` }}
+            action={{ words: mine ? act : "See the lot", to: path }}
           >
             <span className="wrap-anywhere">{words} </span>
             <span className="text-quiet">{program}</span>

@@ -7,7 +7,7 @@ import { defineEntity, p, type InferEntity } from "@mikro-orm/core";
 export const AuditEvent = defineEntity({
   name: "AuditEvent",
   tableName: "audit_event",
-  indexes: [{ properties: ["subject", "subjectId"] }, { properties: ["programId", "at"] }],
+  indexes: [{ properties: ["subject", "subjectId"] }, { properties: ["programId", "at"] }, { properties: ["at"] }],
   properties: {
     id: p.uuid().primary(),
     at: p.datetime(),

@@ -1,5 +1,9 @@
+import { ApiAnswer } from "./api-answer.ts";
+import { ApiRate } from "./api-rate.ts";
+import { ApiToken } from "./api-token.ts";
 import { Assessment } from "./assessment.ts";
 import { AuditEvent } from "./audit-event.ts";
+import { AuditSeal } from "./audit-seal.ts";
 import { BondingMaterial } from "./bonding-material.ts";
 import { Carrier } from "./carrier.ts";
 import { CarrierUnit } from "./carrier-unit.ts";
@@ -87,6 +91,9 @@ export const entities = [
   FlowRevision,
   StepTemplate,
   FlowTemplate,
+  ApiAnswer,
+  ApiRate,
+  ApiToken,
   Assessment,
   Sheet,
   SheetRevision,
@@ -129,4 +136,5 @@ export const entities = [
   MailChoice,
   DemoRecord,
   AuditEvent,
+  AuditSeal,
 ];

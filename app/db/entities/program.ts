@@ -11,6 +11,8 @@ export const Program = defineEntity({
     /** wafer diameter, m */
     diameter: p.double().$type<number>(),
     purpose: p.text(),
+    /** who printed its sheets is kept so long; null: for good */
+    printsKeptYears: p.integer().nullable(),
     createdAt: p.datetime(),
   },
 });

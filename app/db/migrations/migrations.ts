@@ -27,6 +27,10 @@ import { LotsAndFloor } from "./2026-12-13-lots-and-floor.ts";
 import { Incidents } from "./2026-12-14-incidents.ts";
 import { HandOvers } from "./2026-12-15-hand-over.ts";
 import { PeopleAndAccess } from "./2026-12-16-people-and-access.ts";
+import { ApiTokens } from "./2026-12-17-api-tokens.ts";
+import { ApiAnswers } from "./2026-12-17-api-answers.ts";
+import { PrintRetention } from "./2026-12-18-print-retention.ts";
+import { AuditSeal } from "./2026-12-19-audit-seal.ts";
 
 /** Every migration in the order in which it runs. */
 export const migrations = [
@@ -59,4 +63,8 @@ export const migrations = [
   { name: "2026-12-14-incidents", class: Incidents },
   { name: "2026-12-15-hand-over", class: HandOvers },
   { name: "2026-12-16-people-and-access", class: PeopleAndAccess },
+  { name: "2026-12-17-api-tokens", class: ApiTokens },
+  { name: "2026-12-17-api-answers", class: ApiAnswers },
+  { name: "2026-12-18-print-retention", class: PrintRetention },
+  { name: "2026-12-19-audit-seal", class: AuditSeal },
 ];

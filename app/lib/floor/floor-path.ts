@@ -1,5 +1,5 @@
 /** What of a step is entered on its screen, beside what hands do. */
-export const FLOOR_DEEDS = ["measure", "observe", "stop", "hold"] as const;
+export const FLOOR_DEEDS = ["measure", "observe", "incident", "stop", "hold"] as const;
 export type FloorDeed = (typeof FLOOR_DEEDS)[number];
 
 /** The address of a lot on the floor, or of one of its steps, in one part of its flow; `deed` opens a form of the step. */

@@ -10,8 +10,8 @@ export interface QueuedEntry {
   words: string;
   /** ISO */
   at: string;
-  /** the fields of its form; empty once they have been taken off the device */
-  fields: [name: string, value: string][];
+  /** the fields of its form, photos among them; empty once they have been taken off the device */
+  fields: [name: string, value: string | File][];
   /** why the server did not take it; null while it waits */
   refused: string | null;
 }

@@ -24,6 +24,10 @@ export function wipeFloor(): void {
     void caches.keys().then((names) => {
       for (const name of names) if (name.startsWith("floor-pages-")) void caches.delete(name);
     });
+    // What is being kept right now would come after it.
+    void navigator.serviceWorker
+      .getRegistration("/floor/")
+      .then((worker) => worker?.active?.postMessage({ forget: true }));
   } catch {
     // A browser that forbids its stores has nothing in them.
   }

@@ -1,25 +1,41 @@
 import { data, redirect } from "react-router";
 import { SiteSettingsPage } from "#app/components/settings/SiteSettingsPage.tsx";
+import { printRetentionSchema } from "#app/schemas/print-retention.ts";
 import { siteSettingSchema } from "#app/schemas/site-setting.ts";
 import { scopeOf } from "#app/server/contexts.server.ts";
-import { readForm } from "#app/server/form.server.ts";
+import { postedForm } from "#app/server/form.server.ts";
+import { parseForm } from "#app/server/parse-form.server.ts";
 import { problem } from "#app/server/problem.server.ts";
 import { requireOnSite } from "#app/services/permission.server.ts";
 import { saveSiteSettings, siteSettings } from "#app/services/site-settings.server.ts";
+import { printRetention, savePrintRetention } from "#app/services/sheets/print-retention.server.ts";
 import type { Route } from "./+types/settings";
+
+const UNREAD = "These settings could not be read. Open the page again and choose from it.";
 
 export const meta: Route.MetaFunction = () => [{ title: "Site settings · Planeward" }];
 
 export async function loader({ context, url }: Route.LoaderArgs) {
-  return { ...(await siteSettings(scopeOf(context))), saved: url.searchParams.has("saved") };
+  const scope = scopeOf(context);
+  return {
+    ...(await siteSettings(scope)),
+    retention: await printRetention(scope),
+    saved: url.searchParams.has("saved"),
+  };
 }
 
 export async function action({ request, context }: Route.ActionArgs) {
   const scope = scopeOf(context);
   requireOnSite(scope, "edit site settings");
-  const { submission } = await readForm(request, siteSettingSchema);
-  if (submission.status !== "success")
-    throw problem(400, "These settings could not be read. Open the page again and choose from it.");
+  const formData = await postedForm(request);
+  if (formData.get("intent") === "prints") {
+    const kept = parseForm(formData, printRetentionSchema);
+    if (kept.status !== "success") throw problem(400, UNREAD);
+    await savePrintRetention(scope, kept.value.kept);
+    throw redirect("/settings?saved");
+  }
+  const submission = parseForm(formData, siteSettingSchema);
+  if (submission.status !== "success") throw problem(400, UNREAD);
   const saved = await saveSiteSettings(scope, submission.value);
   if (saved.outcome === "refused")
     return data({ reason: saved.reason, version: saved.version, chosen: submission.value.paper }, { status: 409 });

@@ -1,4 +1,3 @@
-import { postedForm } from "#app/server/form.server.ts";
 import { problem } from "#app/server/problem.server.ts";
 import { signedIn } from "#app/middleware/signed-in.server.ts";
 import { scopeOf } from "#app/server/contexts.server.ts";
@@ -14,7 +13,7 @@ export function loader({ context }: Route.LoaderArgs) {
 
 /** Takes one entry of the floor that a browser sends by itself, at once or when the connection is back. */
 export async function action({ request, context, params }: Route.ActionArgs) {
-  const taken = await takeFloorForm(scopeOf(context), params.lotId, await postedForm(request));
+  const taken = await takeFloorForm(scopeOf(context), params.lotId, request);
   if (taken.outcome === "stored") return Response.json({ outcome: "stored" });
   const { sentence } = taken;
   return Response.json({ outcome: "refused", sentence }, { status: sentence === null ? 400 : 409 });

@@ -16,7 +16,12 @@ export async function loader({ context, url }: Route.LoaderArgs) {
   if (sheet !== null) throw redirect(sheet);
   const found = await findLots(scope, typed);
   if (found.exact !== null) throw redirect(`/floor/lots/${found.exact}`);
-  return { found, person: scope.actor.name, waiting: await handOversToTake(scope) };
+  return {
+    found,
+    person: { id: scope.actor.id, name: scope.actor.name },
+    waiting: await handOversToTake(scope),
+    checkedAt: new Date().toISOString(),
+  };
 }
 
 export default function Find({ loaderData }: Route.ComponentProps) {

@@ -14,7 +14,7 @@ export async function loader({ context, params }: Route.LoaderArgs) {
   const scope = scopeOf(context);
   return {
     handOver: await handOver(scope, params.handOverId),
-    person: scope.actor.name,
+    person: { id: scope.actor.id, name: scope.actor.name },
     now: new Date().toISOString(),
   };
 }

@@ -12,7 +12,8 @@ export async function loader({ context, url }: Route.LoaderArgs) {
     query,
     rows: await handOvers(scope, query),
     given: url.searchParams.get("done") === "given",
-    person: scope.actor.name,
+    person: { id: scope.actor.id, name: scope.actor.name },
+    checkedAt: new Date().toISOString(),
   };
 }
 

@@ -4,6 +4,7 @@ import type { DemoTable } from "#app/lib/demo-tables.ts";
 export interface DemoKind {
   table:
     | DemoTable
+    | "api_token"
     | "delegation"
     | "film_stress_value"
     | "hand_over"
@@ -64,6 +65,7 @@ export const DEMO_KINDS: readonly DemoKind[] = [
     by: "x.asked_by_id",
     at: "x.asked_at",
   }),
+  ofProgram("api_token", "API token", "x.name", { by: "x.person_id" }),
   ofProgram("delegation", "delegation", "x.reason", { by: "x.owner_id" }),
   ofProgram("step_measurement", "bow measured after a step", "x.wafer || ', ' || x.step_title", {
     many: "bows measured after a step",

@@ -41,14 +41,32 @@ const GIVEN_ANEW = `exists (select 1 from hand_over later where later.program_id
 export async function handOversToTake(scope: ActorScope): Promise<number> {
   requireInSomeProgram(scope, FLOOR);
   const programs = programsWhere(scope.actor, FLOOR).map(({ programId }) => programId);
-  return inScope(scope, async (em) => {
-    const [row] = await em.execute<{ waiting: number }[]>(
-      `select count(*)::int as waiting from hand_over h
-        where h.program_id in (?) and h.taken_at is null and h.given_by_id <> ? and not ${GIVEN_ANEW}`,
-      [programs, scope.actor.id],
-    );
-    return row?.waiting ?? 0;
-  });
+  return inScope(scope, async (em) => (await waitingToBeTaken(em, scope.actor, programs)).length);
+}
+
+interface Waiting {
+  id: string;
+  place: string;
+  program: string;
+  by: string;
+  lots: number;
+  at: Date | string;
+}
+
+/** What waits for this person to take it in these programs, longest first. */
+export async function waitingToBeTaken(
+  em: EntityManager,
+  actor: ActorScope["actor"],
+  programs: readonly string[],
+): Promise<Waiting[]> {
+  if (programs.length === 0) return [];
+  return em.execute<Waiting[]>(
+    `select h.id, h.place, p.name as program, person.name as by, jsonb_array_length(h.lots) as lots, h.given_at as at
+       from hand_over h join program p on p.id = h.program_id join person on person.id = h.given_by_id
+      where h.program_id in (?) and h.taken_at is null and h.given_by_id <> ? and not ${GIVEN_ANEW}
+      order by h.given_at, h.id`,
+    [programs, actor.id],
+  );
 }
 
 type Found = NonNullable<Awaited<ReturnType<typeof findHandOver>>>;

@@ -8,10 +8,14 @@ import { programsWhere } from "#app/policies/permissions.ts";
 import type { TodayGroup, TodayLot, TodayLots } from "#app/schemas/today.ts";
 import type { ActorScope } from "#app/server/scope.server.ts";
 import { mayClear } from "./blocks.server.ts";
+import { waitingToBeTaken } from "./hand-over.server.ts";
 
 const OPEN = { populate: ["lot", "program"] as const, orderBy: { openedAt: "asc" as const, id: "asc" as const } };
 
-/** Lots as Today needs them: what is held or stopped, longest first, and which lots are on paper that is not in force any more. */
+/**
+ * Lots as Today needs them: what is held or stopped, longest first, which lots are on paper that is not in force any more, and which
+ * places wait to be taken over.
+ */
 export async function lotsOfToday(em: EntityManager, { actor }: ActorScope): Promise<TodayLots> {
   const programs = (permission: Parameters<typeof programsWhere>[1]) =>
     programsWhere(actor, permission).map(({ programId }) => programId);
@@ -25,18 +29,39 @@ export async function lotsOfToday(em: EntityManager, { actor }: ActorScope): Pro
   return {
     blocked: { rows: blocks.slice(0, SHOWN), total: blocks.length },
     toMove: await onOldPaper(em, programs("assign sheets to lots")),
+    toTake: await placesToTake(em, actor),
   };
 
   function blockOf({ id, lot, program, cause, reason, openedAt }: (typeof holds)[number] | (typeof stops)[number]) {
     return {
       id,
-      lotId: lot.id,
+      path: `/lots/${lot.id}`,
       words: `${cause}: ${reason}`,
       program: program.name,
       at: openedAt.toISOString(),
       mine: mayClear(actor, program.id, cause),
     };
   }
+}
+
+/** For technicians and shift leads: others work on the floor now and then, and none of it waits for them. */
+async function placesToTake(em: EntityManager, actor: ActorScope["actor"]): Promise<TodayGroup<TodayLot>> {
+  const programs = programsWhere(actor, "work on the floor")
+    .filter(({ role }) => role === "technician" || actor.siteRole === "shift lead")
+    .map(({ programId }) => programId);
+  const waiting = await waitingToBeTaken(em, actor, programs);
+  return {
+    total: waiting.length,
+    rows: waiting.slice(0, SHOWN).map(({ id, place, program, by, lots, at }) => ({
+      id,
+      path: `/floor/hand-overs/${id}`,
+      title: place,
+      words: `${lots === 1 ? "1 lot" : `${lots} lots`}, given by ${by}.`,
+      program,
+      at: new Date(at).toISOString(),
+      mine: true,
+    })),
+  };
 }
 
 interface PinnedRow {
@@ -72,7 +97,7 @@ async function onOldPaper(em: EntityManager, programs: string[]): Promise<TodayG
       const by = row.superseded_by === null ? "" : ` by ${revisionLetters(row.superseded_by)}`;
       return {
         id: row.id,
-        lotId: row.id,
+        path: `/lots/${row.id}`,
         title: `Lot ${row.name}`,
         words: `Sheet ${recordNumber("sheet", row.slug, row.sheet)} ${revisionLetters(row.number)} is ${row.state}${by}.`,
         program: row.program,

@@ -1,9 +1,9 @@
-import { randomUUID } from "node:crypto";
 import { UniqueConstraintViolationException, type EntityManager } from "@mikro-orm/postgresql";
 import { Incident } from "#app/db/entities/incident.ts";
 import { Wafer } from "#app/db/entities/wafer.ts";
 import { stepPrediction } from "#app/lib/step-prediction.ts";
 import type { IncidentValues } from "#app/schemas/incident-form.ts";
+import { problem } from "#app/server/problem.server.ts";
 import { inScope, type ActorScope } from "#app/server/scope.server.ts";
 import type { UploadedFile } from "#app/server/upload.server.ts";
 import { findAssessment } from "../assessments/assessments.server.ts";
@@ -22,7 +22,8 @@ export type Reported =
 
 /**
  * Stores an incident with its pictures beside what its assessment says of the step, and tells the people of the program, all of it or
- * nothing. A lot or wafer that is not known yet is made, so that nothing keeps anybody from reporting.
+ * nothing. A lot or wafer that is not known yet is made, so that nothing keeps anybody from reporting. One that was stored before is not
+ * stored again.
  * @throws 403 for a role that may not, 404 for an assessment that is not the person's own
  */
 export async function reportIncident(
@@ -38,9 +39,18 @@ export async function reportIncident(
     return await keepReport(scope, values, photos);
   } catch (error) {
     if (error instanceof ImportRefused) return { outcome: "refused", field: "wafer", reasons: [error.message] };
-    // Somebody made the same lot or wafer at the same moment: the second time finds it.
-    if (error instanceof UniqueConstraintViolationException) return keepReport(scope, values, photos);
+    if (error instanceof UniqueConstraintViolationException) return keepAgain(scope, values, photos);
     throw error;
+  }
+}
+
+/** Somebody made the same lot, wafer or report at the same moment: the second time finds it. */
+async function keepAgain(...report: Parameters<typeof keepReport>): Promise<Reported> {
+  try {
+    return await keepReport(...report);
+  } catch (error) {
+    if (!(error instanceof UniqueConstraintViolationException)) throw error;
+    throw problem(409, "Another report has this one’s own number. Open the form again and send it once more.");
   }
 }
 
@@ -48,7 +58,8 @@ function keepReport(scope: ActorScope, values: IncidentValues, photos: readonly 
   return inScope(scope, async (em): Promise<Reported> => {
     const assessment = await reportableAssessment(em, scope, values.assessment);
     const { program, input, result } = assessment;
-    const { leg, step, spot, lot: lotName, wafer: waferName, assessment: _, ...reported } = values;
+    const { id, leg, step, spot, lot: lotName, wafer: waferName, assessment: _, ...reported } = values;
+    if (await em.findOne(Incident, { id, program, createdBy: scope.actor.id })) return { outcome: "stored", id };
     const prediction = stepPrediction(input.$, result, leg, step);
     if (!prediction)
       return {
@@ -57,7 +68,6 @@ function keepReport(scope: ActorScope, values: IncidentValues, photos: readonly 
         reasons: [`The assessment has no step ${step} for these slots. Choose another step, or the other slots.`],
       };
     const { lot, wafer } = await placeOf(em, scope, program.id, lotName, waferName);
-    const id = randomUUID();
     em.create(Incident, {
       id,
       program: program.id,

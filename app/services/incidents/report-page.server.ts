@@ -1,3 +1,4 @@
+import { randomUUID } from "node:crypto";
 import type { EntityManager } from "@mikro-orm/postgresql";
 import { slotsInWords } from "#app/engine/flow/legs.ts";
 import { Lot } from "#app/db/entities/lot.ts";
@@ -54,6 +55,7 @@ export async function reportPage(scope: ActorScope, search: URLSearchParams): Pr
           leg: numberIn(search, "leg") || String(legs[0]?.leg ?? 0),
           lot: given.lot || (assessment.lot?.name ?? ""),
           wafer: given.wafer,
+          id: randomUUID(),
           occurredAt: new Date().toISOString().slice(0, 16).replace("T", " "),
         },
       },

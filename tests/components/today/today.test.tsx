@@ -27,7 +27,7 @@ const EMPTY: TodayView = {
   notAssessed: none,
   scans: [],
   sheets: SHEETS,
-  lots: { blocked: none, toMove: none },
+  lots: { blocked: none, toMove: none, toTake: none },
   incidents: none,
   programs: [PROGRAM],
   kept: [],

@@ -57,7 +57,7 @@ describe("flows by what they wait for", () => {
   });
 });
 
-const NO_LOTS = { blocked: { total: 0 }, toMove: { total: 0 } };
+const NO_LOTS = { blocked: { total: 0 }, toMove: { total: 0 }, toTake: { total: 0 } };
 
 describe("the sentence at the top", () => {
   it.each<[decisions: number, outOfDate: number, notAssessed: number, sentence: string]>([
@@ -83,10 +83,10 @@ describe("the sentence at the top", () => {
   it("begins with what waits for the reader alone", () => {
     const sheets = { toRelease: { total: 2 }, toSign: { total: 1 }, returned: { total: 1 } };
     const none = { total: 0 };
-    const lots = { blocked: { total: 1 }, toMove: { total: 2 } };
+    const lots = { blocked: { total: 1 }, toMove: { total: 2 }, toTake: { total: 1 } };
     const incidents = { total: 2 };
     expect(headline({ sheets, lots, incidents, decisions: { total: 1 }, outOfDate: none, notAssessed: none })).toBe(
-      "Two sheets wait for your review, one deviation waits for your signature, one sheet was returned to you, one lot or step is held, two lots are on old sheets, two incidents are to be followed up and one flow needs a decision.",
+      "Two sheets wait for your review, one deviation waits for your signature, one sheet was returned to you, one lot or step is held, one place is to be taken over, two lots are on old sheets, two incidents are to be followed up and one flow needs a decision.",
     );
   });
 

@@ -2,38 +2,22 @@ import { jobJson } from "#app/lib/job-json.ts";
 import { SCAN_FILE_LIMIT, tooLargeSentence } from "#app/lib/scan-file.ts";
 import { mayInProgram } from "#app/policies/permissions.ts";
 import { scanRequestSchema } from "#app/schemas/scan-request.ts";
-import { actorContext, scopeOf } from "#app/server/contexts.server.ts";
-import { problemJson, problemJsonOf } from "#app/server/problem-json.server.ts";
+import { problemJson } from "#app/server/problem-json.server.ts";
 import type { ActorScope } from "#app/server/scope.server.ts";
 import { readUpload } from "#app/server/upload.server.ts";
-import { getImportProfile } from "#app/services/import-profiles.server.ts";
-import { getJob } from "#app/services/jobs/jobs.server.ts";
-import { getReading } from "#app/services/scan-readings/get-reading.server.ts";
-import { importScanFiles } from "#app/services/scan-readings/import-files.server.ts";
+import { getImportProfile } from "../import-profiles.server.ts";
+import { getJob } from "../jobs/jobs.server.ts";
+import { getReading } from "../scan-readings/get-reading.server.ts";
+import { importScanFiles } from "../scan-readings/import-files.server.ts";
 import { scanAnswer } from "./scan-answer.server.ts";
-import type { Route } from "./+types/scans";
-
-const onlyPost = () => problemJson(405, "Send a POST.", { headers: { Allow: "POST" } });
-
-export const loader = onlyPost;
 
 /**
  * Takes a file in (multipart/form-data: `file`, `program`, and `import_profile` as JSON or `import_profile_id`). 201 with what the file
  * says, 200 with the same when it has been read in that way before, 202 with the job that reads a large one.
  */
-export async function action({ request, context }: Route.ActionArgs) {
-  if (request.method !== "POST") return onlyPost();
-  if (!context.get(actorContext)) return problemJson(401, "Sign in first; the session cookie is what counts here.");
+export async function uploadScan(scope: ActorScope, request: Request): Promise<Response> {
   if (!/^multipart\/form-data/i.test(request.headers.get("Content-Type") ?? ""))
     return problemJson(415, "Send multipart/form-data with the file in the field “file”.");
-  try {
-    return await answer(scopeOf(context), request);
-  } catch (error) {
-    return problemJsonOf(error);
-  }
-}
-
-async function answer(scope: ActorScope, request: Request): Promise<Response> {
   const { formData, files, tooLarge } = await readUpload(request, ["file"], SCAN_FILE_LIMIT);
   const { file } = files;
   if (tooLarge.file) return problemJson(413, tooLargeSentence(tooLarge.file.name, tooLarge.file.size));

@@ -1,0 +1,66 @@
+import { getCollectionProps, getFormProps, type FieldMetadata, type SubmissionResult } from "@conform-to/react";
+import { Form } from "react-router";
+import { ChoiceField } from "#app/components/forms/ChoiceField.tsx";
+import { LineField } from "#app/components/forms/LineField.tsx";
+import { SubmitButton } from "#app/components/forms/SubmitButton.tsx";
+import { useRecordForm } from "#app/components/forms/use-record-form.ts";
+import { API_SCOPE_NAMES, API_SCOPES, TOKEN_LIVES, type ApiScope, type TokensView } from "#app/schemas/api-token.ts";
+
+interface Props {
+  programs: TokensView["programs"];
+  lastResult: SubmissionResult<string[]> | undefined;
+}
+
+interface Values extends Record<string, unknown> {
+  name: string;
+  program: string;
+  scopes: string[];
+  days: string;
+}
+
+const LIVES = TOKEN_LIVES.map((days) => ({ value: String(days), label: `${days}\u00A0days` }));
+
+/** The form in which a person makes a token. */
+export function MakeToken({ programs, lastResult }: Props) {
+  const [form, { name, program, scopes, days }] = useRecordForm<Values>({
+    id: "token",
+    lastResult,
+    defaultValue: { days: "90" },
+  });
+  return (
+    <section aria-labelledby="make-token" className="frame p-4">
+      <h2 id="make-token" className="font-semibold">
+        Make a token
+      </h2>
+      <Form method="post" {...getFormProps(form)} className="mt-3 space-y-2">
+        <input type="hidden" name="intent" value="make" />
+        <LineField field={name} label="What will use it" hint="Such as: bow gauge in bay 3." />
+        <ChoiceField
+          field={program}
+          label="Program"
+          choices={programs.map(({ id, name: label }) => ({ value: id, label }))}
+          blank="Choose a program"
+          hint="It sees no other."
+        />
+        <Scopes field={scopes} />
+        <ChoiceField field={days} label="Good for" choices={LIVES} hint="It can be revoked at any time." />
+        <SubmitButton busy="Making">Make the token</SubmitButton>
+      </Form>
+    </section>
+  );
+}
+
+function Scopes({ field }: { field: FieldMetadata<string[]> }) {
+  return (
+    <fieldset className="field" aria-describedby={field.errorId}>
+      <legend className="mb-1 text-label text-quiet">What it may do</legend>
+      {getCollectionProps(field, { type: "checkbox", options: [...API_SCOPE_NAMES] }).map(({ key, ...box }) => (
+        <label key={key} className="mb-0 flex min-h-8 items-center gap-2 text-body text-ink">
+          <input {...box} className="size-4 accent-ink" />
+          <span>{API_SCOPES[box.value as ApiScope]}</span>
+        </label>
+      ))}
+      <small id={field.errorId}>{field.errors?.[0] ?? "As little as it needs."}</small>
+    </fieldset>
+  );
+}
