@@ -5,6 +5,8 @@ export default [
   route("readyz", "routes/readyz.ts"),
   layout("routes/_public/layout.tsx", [
     route("sign-in", "routes/_public/sign-in.tsx"),
+    route("forgotten", "routes/_public/forgotten.tsx"),
+    route("set-password/:secret", "routes/_public/set-password.tsx"),
     route("s/:token", "routes/_public/sheet-status.tsx"),
     route("unsubscribe/:token", "routes/_public/unsubscribe.tsx"),
   ]),
@@ -145,6 +147,11 @@ export default [
       route(":instrumentId/reference", "routes/_app/instruments/reference.tsx"),
     ]),
     route("demo", "routes/_app/demo.tsx"),
+    ...prefix("people", [
+      index("routes/_app/people/list.tsx"),
+      route("new", "routes/_app/people/new.tsx"),
+      route(":personId", "routes/_app/people/person.tsx"),
+    ]),
     route("settings", "routes/_app/settings.tsx"),
     route("api", "routes/_app/api.tsx"),
     route("tokens", "routes/_app/tokens.tsx"),

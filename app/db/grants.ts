@@ -77,6 +77,8 @@ const READ_AND_WRITE = [
   "api_answer",
   "api_rate",
   "mail_choice",
+  "person_token",
+  "rate_limit",
 ];
 
 /** SQL that gives the role its rights and nothing more. */

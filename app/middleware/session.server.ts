@@ -1,5 +1,5 @@
 import type { MiddlewareFunction } from "react-router";
-import { actorContext, bearerContext, requestIdContext } from "#app/server/contexts.server.ts";
+import { actorContext, bearerContext, requestIdContext, sessionContext } from "#app/server/contexts.server.ts";
 import { clearedSessionCookie, sessionCookie, tokenOf } from "#app/server/session-cookie.server.ts";
 import { resumeSession } from "#app/services/sessions.server.ts";
 
@@ -9,7 +9,10 @@ export const session: MiddlewareFunction<Response> = async ({ request, context }
   const token = await tokenOf(request);
   if (!token) return next();
   const resumed = await resumeSession(token, context.get(requestIdContext));
-  if (resumed) context.set(actorContext, resumed.actor);
+  if (resumed) {
+    context.set(actorContext, resumed.actor);
+    context.set(sessionContext, resumed.session);
+  }
   const response = await next();
   // A sign-in or sign-out below has already said what the cookie is to be.
   if (response.headers.has("Set-Cookie")) return response;

@@ -31,6 +31,7 @@ export const SITE_PERMISSIONS = {
   "check instruments": ["technician", "engineer", "process owner", "shift lead"],
   "edit carriers, bonds and limits": ["process owner", "administrator"],
   "edit site settings": ["administrator"],
+  "manage people": ["administrator"],
   "load and remove the demo": ["process owner"],
   "see the audit trail": ["administrator"],
 } as const satisfies Record<string, readonly (ProgramRole | SiteRole)[]>;

@@ -17,6 +17,7 @@ const ALL: (Place & { open: (actor: Actor) => boolean })[] = [
   { name: "Sheets", path: "/sheets", open: (actor) => programsWhere(actor, "see released sheets").length > 0 },
   { name: "Floor", path: "/floor", open: (actor) => programsWhere(actor, "work on the floor").length > 0 },
   { name: "Method", path: "/method", open: () => true },
+  { name: "People", path: "/people", open: (actor) => mayOnSite(actor, "manage people") },
   { name: "Settings", path: "/settings", open: (actor) => mayOnSite(actor, "edit site settings") },
 ];
 

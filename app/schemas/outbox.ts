@@ -1,3 +1,4 @@
+import type { AccountMail } from "#app/lib/account-mail.ts";
 import type { AnnouncementKind } from "./announcement.ts";
 
 /**
@@ -10,8 +11,8 @@ export type MailState = (typeof MAIL_STATES)[number];
 /** A mail as those see it who look after the outbox: to whom, of what and how far, and nothing of its text. */
 export interface OutboxRow {
   id: string;
-  kind: AnnouncementKind | "digest";
-  /** null for a digest, which is of all the programs of its recipient */
+  kind: AnnouncementKind | AccountMail | "digest";
+  /** null for a digest, which is of all the programs of its recipient, and for mail about an account */
   program: string | null;
   to: string;
   email: string;

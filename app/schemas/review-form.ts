@@ -38,6 +38,8 @@ export const reviewFormSchema = z.discriminatedUnion("intent", [
     intent: z.literal("release"),
     assumptions: z.literal("checked", "Tick that you have been through the assumptions."),
     remark: z.string().trim().max(1000, "Keep it under 1000 characters.").default(""),
+    /** the password, asked for where the last proof is older than ten minutes */
+    proof: z.string().max(1000).default(""),
   }),
 ]);
 export type ReviewForm = z.output<typeof reviewFormSchema>;

@@ -60,4 +60,6 @@ export interface ReviewView {
   /** why no review can be asked for now; null when it can */
   notAsked: string | null;
   may: { ask: boolean; comment: boolean; deviate: boolean; return: boolean; release: boolean };
+  /** the reader has to type the password to release */
+  proofAsked: boolean;
 }

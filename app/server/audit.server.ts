@@ -82,6 +82,7 @@ const LEFT_OUT = new Set([
   "createdBy",
   "updatedBy",
   "passwordHash",
+  "lastSignInAt",
   "token",
   "tokenHash",
   "lastUsedAt",

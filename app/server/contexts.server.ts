@@ -1,11 +1,12 @@
 import { createContext, type RouterContextProvider } from "react-router";
 import type { Actor } from "#app/policies/roles.ts";
+import type { ActorScope, SessionOfScope } from "./scope.server.ts";
 import type { TokenBearer } from "#app/services/api/token-actor.server.ts";
-import type { ActorScope } from "./scope.server.ts";
 
 /** Set by middleware for everything below it. */
 export const requestIdContext = createContext<string>("");
 export const nonceContext = createContext<string>("");
+export const sessionContext = createContext<SessionOfScope | null>(null);
 export const actorContext = createContext<Actor | null>(null);
 /** set where a request of the API came with a token; its cookie then counts for nothing */
 export const bearerContext = createContext<TokenBearer | null>(null);
@@ -18,5 +19,10 @@ export function scopeOf(context: Readonly<RouterContextProvider>): ActorScope {
   const actor = context.get(actorContext);
   if (!actor) throw new Error("This route is not behind the signed-in layout.");
   const onlyProgram = context.get(bearerContext)?.programId;
-  return { actor, requestId: context.get(requestIdContext), ...(onlyProgram && { onlyProgram }) };
+  return {
+    actor,
+    session: context.get(sessionContext),
+    requestId: context.get(requestIdContext),
+    ...(onlyProgram && { onlyProgram }),
+  };
 }

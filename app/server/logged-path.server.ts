@@ -1,4 +1,6 @@
-/** The path of a request as the log has it: what opens somebody's choices of mail is left out of it. */
+const SECRET = /^\/(unsubscribe|set-password|confirm-address)\/[^/]+/;
+
+/** The path of a request as the log has it: the secret of a link in a mail is left out of it. */
 export function loggedPath(request: Request): string {
-  return new URL(request.url).pathname.replace(/^\/unsubscribe\/[^/]+/, "/unsubscribe/…");
+  return new URL(request.url).pathname.replace(SECRET, "/$1/…");
 }

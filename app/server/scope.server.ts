@@ -13,9 +13,18 @@ export interface Scope {
   requestId: string;
 }
 
+/** The session that a request came with. */
+export interface SessionOfScope {
+  id: string;
+  /** when the person last proved who they are, ms since 1970 */
+  provenAt: number;
+}
+
 /** The scope of a signed-in person's request. */
 export interface ActorScope {
   actor: Actor;
+  /** missing where the person does not act by a browser, such as in a job */
+  session?: SessionOfScope | null;
   requestId: string;
   /** the one program that a request with a token is for; row-level security then knows no other */
   onlyProgram?: string;

@@ -1,7 +1,8 @@
 import { createHash, randomBytes, randomUUID } from "node:crypto";
+import { Person } from "#app/db/entities/person.ts";
 import { Session } from "#app/db/entities/session.ts";
 import type { Actor } from "#app/policies/roles.ts";
-import { inScope } from "#app/server/scope.server.ts";
+import { inScope, type SessionOfScope } from "#app/server/scope.server.ts";
 import { actorOf } from "./actor.server.ts";
 
 const MINUTE = 60_000;
@@ -38,9 +39,11 @@ export async function startSession(personId: string, userAgent: string, requestI
       createdAt: now,
       lastSeenAt: now,
       expiresAt,
+      provenAt: now,
       userAgent: userAgent.slice(0, 200),
     });
     await em.flush();
+    await em.nativeUpdate(Person, { id: personId }, { lastSignInAt: now });
     return { token, expiresAt };
   });
 }
@@ -49,7 +52,7 @@ export async function startSession(personId: string, userAgent: string, requestI
 export async function resumeSession(
   token: string,
   requestId: string,
-): Promise<{ actor: Actor; renewed: StartedSession | null } | null> {
+): Promise<{ actor: Actor; session: SessionOfScope; renewed: StartedSession | null } | null> {
   return inScope({ personId: null, atTheDoor: true, requestId }, async (em) => {
     const hash = digest(token);
     const session = await em.findOne(
@@ -74,7 +77,7 @@ export async function resumeSession(
     if (session.lastSeenAt.getTime() + NOTE_USE_AFTER <= now) session.lastSeenAt = new Date(now);
     const actor = await actorOf(em, session.person);
     await em.flush();
-    return { actor, renewed };
+    return { actor, session: { id: session.id, provenAt: session.provenAt.getTime() }, renewed };
   });
 }
 

@@ -77,6 +77,7 @@ export async function ternIds(engineer: APIRequestContext): Promise<DoorIds> {
         query,
         "select w.id from wafer w join program p on p.id = w.program_id where p.slug = 'tern'",
       ),
+      personId: await idOf(query, "select id from person where email = 'guest@kestrel-ridge.example'"),
       recordId: await idOf(query, "select id from carrier order by name limit 1"),
     };
   });

@@ -1,3 +1,4 @@
+import { randomUUID } from "node:crypto";
 import type { Actor } from "#app/policies/roles.ts";
 import type { ActorScope } from "#app/server/scope.server.ts";
 import { asOwner, type TestDatabase } from "./test-database.ts";
@@ -18,6 +19,7 @@ export async function scopeOfPerson(database: TestDatabase, account: string): Pr
   );
   return {
     actor: { id: person.id, name: person.name, email: person.email, siteRole: person.site_role, memberships },
+    session: { id: randomUUID(), provenAt: Date.now() },
     requestId: "test",
   };
 }

@@ -107,6 +107,7 @@ describe("every table", () => {
     "person",
     "credential",
     "session",
+    "person_token",
     "membership",
     "program",
     "audit_event",

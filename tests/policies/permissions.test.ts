@@ -44,6 +44,7 @@ const SITE_TABLE: Record<keyof typeof SITE_PERMISSIONS, string> = {
   "check instruments": "   - y y y y -",
   "edit carriers, bonds and limits": "- - - - y y",
   "edit site settings": "  - - - - - y",
+  "manage people": "       - - - - - y",
   "load and remove the demo": "- - - - y -",
   "see the audit trail": "- - - - - y",
 };

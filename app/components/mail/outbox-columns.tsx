@@ -1,5 +1,6 @@
 import { Form } from "react-router";
 import type { Column } from "#app/components/ui/DataTable.tsx";
+import { ACCOUNT_MAIL_WORDS, isAccountMail } from "#app/lib/account-mail.ts";
 import { KIND_WORDS } from "#app/lib/mail/kind-words.ts";
 import { minuteOf } from "#app/lib/minute-of.ts";
 import type { MailState, OutboxRow } from "#app/schemas/outbox.ts";
@@ -22,8 +23,10 @@ export const OUTBOX_COLUMNS: Column<OutboxRow>[] = [
     head: "About",
     cell: ({ kind, program }) => (
       <>
-        {kind === "digest" ? "The daily digest" : KIND_WORDS[kind]}
-        <span className="block text-label text-quiet">{program ?? "All programs of its reader"}</span>
+        {wordsOf(kind)}
+        <span className="block text-label text-quiet">
+          {program ?? (isAccountMail(kind) ? "No program" : "All programs of its reader")}
+        </span>
       </>
     ),
   },
@@ -62,6 +65,11 @@ export const OUTBOX_COLUMNS: Column<OutboxRow>[] = [
       ),
   },
 ];
+
+function wordsOf(kind: OutboxRow["kind"]): string {
+  if (kind === "digest") return "The daily digest";
+  return isAccountMail(kind) ? ACCOUNT_MAIL_WORDS[kind] : KIND_WORDS[kind];
+}
 
 function howItStands({ state, attempts, reason, nextTryAt, sentAt }: OutboxRow): string {
   if (sentAt !== null) return minuteOf(sentAt);

@@ -1,5 +1,6 @@
 import { getInputProps } from "@conform-to/react";
 import { NoteField } from "#app/components/forms/NoteField.tsx";
+import { PasswordField } from "#app/components/people/PasswordField.tsx";
 import type { ReviewRevision, ReviewView } from "#app/schemas/review-view.ts";
 import { ReviewForm, type ReviewAnswer } from "./ReviewForm.tsx";
 import { HungSection } from "#app/components/ui/HungSection.tsx";
@@ -11,7 +12,7 @@ interface Props {
 }
 
 /** The decision: what stands in the way of a release for this reader, releasing, and returning. */
-export function Decision({ view: { may, assumed }, revision: { obstacles, askedBy }, answer }: Props) {
+export function Decision({ view: { may, assumed, proofAsked }, revision: { obstacles, askedBy }, answer }: Props) {
   return (
     <>
       <HungSection title="Release">
@@ -41,7 +42,7 @@ export function Decision({ view: { may, assumed }, revision: { obstacles, askedB
               busy="Releasing: the papers are being set"
               primary
             >
-              {({ assumptions, remark }) => (
+              {({ assumptions, remark, proof }) => (
                 <>
                   <div className="field">
                     <label className="mb-0 flex min-h-8 items-center gap-2 text-body text-ink">
@@ -60,6 +61,14 @@ export function Decision({ view: { may, assumed }, revision: { obstacles, askedB
                     {assumptions.errors && <small id={assumptions.errorId}>{assumptions.errors[0]}</small>}
                   </div>
                   <NoteField field={remark} label="Remark" rows={2} hint="May stay empty." />
+                  {proofAsked && (
+                    <PasswordField
+                      name={proof.name}
+                      label="Your password"
+                      hint="You signed in more than ten minutes ago."
+                      error={proof.errors?.[0]}
+                    />
+                  )}
                 </>
               )}
             </ReviewForm>

@@ -27,8 +27,10 @@ import { MailChoice } from "./mail-choice.ts";
 import { MailOutbox } from "./mail-outbox.ts";
 import { Membership } from "./membership.ts";
 import { Person } from "./person.ts";
+import { PersonToken } from "./person-token.ts";
 import { Preference } from "./preference.ts";
 import { Program } from "./program.ts";
+import { RateLimit } from "./rate-limit.ts";
 import { RecentVisit } from "./recent-visit.ts";
 import { ReferenceReading } from "./reference-reading.ts";
 import { ReferenceWafer } from "./reference-wafer.ts";
@@ -124,9 +126,11 @@ export const entities = [
   StepStop,
   Scan,
   Job,
+  RateLimit,
   RecentVisit,
   Favourite,
   SavedFilter,
+  PersonToken,
   Preference,
   MailOutbox,
   MailChoice,

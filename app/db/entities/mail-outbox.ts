@@ -1,4 +1,5 @@
 import { defineEntity, p, type InferEntity } from "@mikro-orm/core";
+import type { AccountMail } from "#app/lib/account-mail.ts";
 import type { Announcement, AnnouncementKind } from "#app/schemas/announcement.ts";
 import type { MailState } from "#app/schemas/outbox.ts";
 import { Person } from "./person.ts";
@@ -17,11 +18,13 @@ export const MailOutbox = defineEntity({
     id: p.uuid().primary(),
     program: () => p.manyToOne(Program).nullable().deleteRule("no action"),
     person: () => p.manyToOne(Person).index(),
-    kind: p.text().$type<AnnouncementKind | "digest">(),
+    kind: p.text().$type<AnnouncementKind | AccountMail | "digest">(),
     /** what of its kind it tells, such as the id of a revision: one person hears of it once */
     key: p.text(),
     announcement: p.json<Announcement>().nullable(),
     state: p.text().$type<MailState>(),
+    /** where it goes, if not to the address that the person has by then */
+    address: p.text().nullable(),
     /** the same at every attempt, so that whoever gets it twice can tell */
     messageId: p.text().unique(),
     attempts: p.integer(),

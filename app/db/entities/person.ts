@@ -12,6 +12,9 @@ export const Person = defineEntity({
     siteRole: p.text().$type<"administrator" | "shift lead">().nullable(),
     active: p.boolean(),
     createdAt: p.datetime(),
+    /** since when an invitation waits for its answer; null once a password is set. Nobody invited is active: no mail of a program goes out */
+    invitedAt: p.datetime().nullable(),
+    lastSignInAt: p.datetime().nullable(),
   },
 });
 export type Person = InferEntity<typeof Person>;

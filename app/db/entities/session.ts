@@ -17,6 +17,8 @@ export const Session = defineEntity({
     createdAt: p.datetime(),
     lastSeenAt: p.datetime(),
     expiresAt: p.datetime(),
+    /** when the person last proved who they are */
+    provenAt: p.datetime(),
     userAgent: p.text(),
   },
 });

@@ -26,6 +26,7 @@ import { Delegations } from "./2026-12-12-delegations.ts";
 import { LotsAndFloor } from "./2026-12-13-lots-and-floor.ts";
 import { Incidents } from "./2026-12-14-incidents.ts";
 import { HandOvers } from "./2026-12-15-hand-over.ts";
+import { PeopleAndAccess } from "./2026-12-16-people-and-access.ts";
 import { ApiTokens } from "./2026-12-17-api-tokens.ts";
 import { ApiAnswers } from "./2026-12-17-api-answers.ts";
 import { PrintRetention } from "./2026-12-18-print-retention.ts";
@@ -61,6 +62,7 @@ export const migrations = [
   { name: "2026-12-13-lots-and-floor", class: LotsAndFloor },
   { name: "2026-12-14-incidents", class: Incidents },
   { name: "2026-12-15-hand-over", class: HandOvers },
+  { name: "2026-12-16-people-and-access", class: PeopleAndAccess },
   { name: "2026-12-17-api-tokens", class: ApiTokens },
   { name: "2026-12-17-api-answers", class: ApiAnswers },
   { name: "2026-12-18-print-retention", class: PrintRetention },

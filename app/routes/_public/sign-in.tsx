@@ -1,9 +1,9 @@
-import { data, Form, redirect, useNavigation } from "react-router";
+import { data, Form, Link, redirect, useNavigation } from "react-router";
 import { ThinningStory } from "#app/components/sign-in/ThinningStory.tsx";
 import { Mark } from "#app/components/drawings/Mark.tsx";
 import { TextField } from "#app/components/ui/TextField.tsx";
 import { localPath } from "#app/lib/local-path.ts";
-import { authenticator, signInSchema, SignInRefused } from "#app/server/authenticator.server.ts";
+import { authenticator, signInSchema, SignInRefused, TooManyAttempts } from "#app/server/authenticator.server.ts";
 import { actorContext, requestIdContext } from "#app/server/contexts.server.ts";
 import { sessionCookie } from "#app/server/session-cookie.server.ts";
 import { thinningStory } from "#app/services/thinning-story.server.ts";
@@ -27,7 +27,7 @@ export const meta: Route.MetaFunction = ({ loaderData }) => [
 
 export function loader({ context, url }: Route.LoaderArgs) {
   if (context.get(actorContext)) throw redirect(localPath(url.searchParams.get("next")));
-  return { story: thinningStory(), origin: url.origin };
+  return { story: thinningStory(), origin: url.origin, passwordSet: url.searchParams.has("set") };
 }
 
 export async function action({ request, context, url }: Route.ActionArgs) {
@@ -46,10 +46,12 @@ export async function action({ request, context, url }: Route.ActionArgs) {
       headers: { "Set-Cookie": await sessionCookie(request, started) },
     });
   } catch (error) {
-    if (!(error instanceof SignInRefused)) throw error;
+    const tooMany = error instanceof TooManyAttempts;
+    if (!tooMany && !(error instanceof SignInRefused)) throw error;
+    const form = tooMany ? error.message : `${error.message} Check both and try again.`;
     return data(
-      { errors: { form: error.message } as Record<string, string>, email: parsed.data.email },
-      { status: 400 },
+      { errors: { form } as Record<string, string>, email: parsed.data.email },
+      { status: tooMany ? 429 : 400 },
     );
   }
 }
@@ -68,10 +70,15 @@ export default function SignIn({ actionData, loaderData }: Route.ComponentProps)
             </p>
             <h1 className="mt-6 text-answer font-medium">{PROMISE}</h1>
           </div>
+          {loaderData.passwordSet && (
+            <p role="status" className="border-t border-line px-6 py-3">
+              Your password is set. Sign in with it.
+            </p>
+          )}
           <Form method="post" className="border-t border-ink" aria-label="Sign in">
             {errors?.["form"] && (
               <p role="alert" className="border-b border-line px-6 py-3 text-stop">
-                {errors["form"]} Check both and try again.
+                {errors["form"]}
               </p>
             )}
             <div className="border-b border-line px-6 py-3">
@@ -99,7 +106,12 @@ export default function SignIn({ actionData, loaderData }: Route.ComponentProps)
               <button type="submit" className="btn btn-primary w-full" disabled={busy}>
                 {busy ? "Signing in" : "Sign in"}
               </button>
-              <p className="mt-3 text-label text-quiet">No account, or forgotten password: ask your administrator.</p>
+              <p className="mt-3">
+                <Link to="/forgotten" className="link">
+                  I have forgotten my password
+                </Link>
+              </p>
+              <p className="mt-1 text-label text-quiet">No account: ask your administrator for an invitation.</p>
             </div>
           </Form>
         </div>

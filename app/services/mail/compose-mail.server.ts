@@ -3,6 +3,7 @@ import { readFile } from "node:fs/promises";
 import type { EntityManager } from "@mikro-orm/postgresql";
 import type { MailOutbox } from "#app/db/entities/mail-outbox.ts";
 import type { OutgoingMail } from "#app/integrations/mail/transport.ts";
+import { isAccountMail, type AccountMail } from "#app/lib/account-mail.ts";
 import { KINDS_OF_MAIL } from "#app/lib/mail/mail-choices.ts";
 import { oneLine } from "#app/lib/mail/one-line.ts";
 import { mayInProgram } from "#app/policies/permissions.ts";
@@ -11,6 +12,7 @@ import type { Announcement } from "#app/schemas/announcement.ts";
 import { environment } from "#app/server/environment.server.ts";
 import { inScope, type Scope } from "#app/server/scope.server.ts";
 import { actorById } from "../actor.server.ts";
+import { composeAccountMail } from "./compose-account-mail.server.ts";
 import { letterHtml, MARK_CID } from "./letter-html.ts";
 import { letterText } from "./letter-text.ts";
 import type { Letter } from "./letter.ts";
@@ -25,6 +27,7 @@ const markFile = new URL("../../../public/icon-72.png", import.meta.url);
  * Writes a mail of the outbox to its recipient as they stand now: who has left the program or the site since gets nothing of it.
  */
 export async function composeMail(work: Scope, row: MailOutbox): Promise<Composed> {
+  if (isAccountMail(row.kind)) return composeAccount(work, { ...row, kind: row.kind });
   const actor = await actorById(row.person.id, work.requestId);
   if (!actor) return { dropped: "The recipient's account is not in use any more." };
   const { announcements, unsubscribeToken } = await inScope(work, async (em) => ({
@@ -46,6 +49,24 @@ export async function composeMail(work: Scope, row: MailOutbox): Promise<Compose
       html: letterHtml(letter),
       pictures: [{ cid: MARK_CID, fileName: "planeward.png", content: await readFile(markFile) }],
       unsubscribe: mayStop ? unsubscribeAddress(written, isDigest ? "digest" : first.kind) : null,
+      sentAt: new Date(),
+    },
+  };
+}
+
+async function composeAccount(work: Scope, row: MailOutbox & { kind: AccountMail }): Promise<Composed> {
+  const composed = await composeAccountMail(work, row);
+  if ("dropped" in composed) return composed;
+  const { letter, to } = composed;
+  return {
+    mail: {
+      messageId: row.messageId,
+      to: { name: oneLine(to.name), address: to.address },
+      subject: letter.subject,
+      text: letterText(letter),
+      html: letterHtml(letter),
+      pictures: [{ cid: MARK_CID, fileName: "planeward.png", content: await readFile(markFile) }],
+      unsubscribe: null,
       sentAt: new Date(),
     },
   };

@@ -14,7 +14,7 @@ import { queueMail } from "./queue-mail.server.ts";
 
 export const OUTBOX_SORTS = ["written"] as const;
 
-/** The mail of the programs that the person looks after, the newest first; an administrator sees the digests as well. */
+/** The mail of the programs that the person looks after, the newest first; an administrator sees the digests and mail about accounts as well. */
 export async function listOutbox(scope: ActorScope, params: ListParams): Promise<ListPage<OutboxRow>> {
   requireInSomeProgram(scope, "see the outbox");
   const { query, filters, descending, page } = params;
@@ -56,7 +56,7 @@ function rowOf(mail: Shown): OutboxRow {
     kind,
     program: mail.program?.name ?? null,
     to: mail.person.name,
-    email: mail.person.email,
+    email: mail.address ?? mail.person.email,
     state,
     attempts,
     reason,

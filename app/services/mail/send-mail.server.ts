@@ -4,6 +4,7 @@ import type { EntityManager } from "@mikro-orm/postgresql";
 import { z } from "zod";
 import { MailOutbox } from "#app/db/entities/mail-outbox.ts";
 import { LONGEST_ATTEMPT, type Delivery, type MailTransport } from "#app/integrations/mail/transport.ts";
+import { isAccountMail } from "#app/lib/account-mail.ts";
 import { KINDS_OF_MAIL } from "#app/lib/mail/mail-choices.ts";
 import { inScope, type Scope } from "#app/server/scope.server.ts";
 import { backOff, MOST_ATTEMPTS } from "./back-off.ts";
@@ -112,4 +113,5 @@ function end(row: MailOutbox, state: "sent" | "parked" | "dropped", reason: stri
   });
 }
 
-const isEssential = ({ kind }: MailOutbox): boolean => kind !== "digest" && KINDS_OF_MAIL[kind].essential;
+const isEssential = ({ kind }: MailOutbox): boolean =>
+  isAccountMail(kind) || (kind !== "digest" && KINDS_OF_MAIL[kind].essential);

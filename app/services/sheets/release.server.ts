@@ -14,6 +14,7 @@ import { releaseObstacles } from "#app/policies/release.ts";
 import type { SheetDocument as Document } from "#app/schemas/sheet-document.ts";
 import { problem } from "#app/server/problem.server.ts";
 import { inScope, type ActorScope } from "#app/server/scope.server.ts";
+import { requireRecentProof } from "../people/recent-proof.server.ts";
 import { lastReleased } from "./last-released.server.ts";
 import { inForce, releaseCaseOf } from "./release-case.server.ts";
 import { findRevision, lockedRevision, type FoundRevision } from "./revision.server.ts";
@@ -37,7 +38,7 @@ interface Prepared {
  * Releases a revision: gives it its letter, freezes its papers, and ends the revision before it in the same transaction. The papers are
  * drawn before that transaction begins, which then looks again whether everything still is as they say.
  * @param origin beginning of the address that the code on paper leads to
- * @throws 409 with everything that stands in the way
+ * @throws 403 without a recent proof of who releases, 409 with everything that stands in the way
  */
 export async function releaseRevision(
   scope: ActorScope,
@@ -45,6 +46,7 @@ export async function releaseRevision(
   remark: string,
   origin: string,
 ): Promise<void> {
+  requireRecentProof(scope);
   const prepared = await inScope(scope, (em) => prepare(em, scope, revisionId, origin));
   const files: (SetFile & { leg: number })[] = [];
   for (const { leg, document } of prepared.documents)

@@ -3,6 +3,7 @@ import { readForm } from "#app/server/form.server.ts";
 import { notFound } from "#app/server/problem.server.ts";
 import { inScope, type ActorScope } from "#app/server/scope.server.ts";
 import { findAssessment } from "../assessments/assessments.server.ts";
+import { proveAgain } from "../people/recent-proof.server.ts";
 import { askReview } from "./ask-review.server.ts";
 import { releaseRevision } from "./release.server.ts";
 import { commentInReview, recordDeviation, returnRevision, signDeviation } from "./review-deeds.server.ts";
@@ -21,8 +22,18 @@ export async function takeReviewForm(
   const { formData, submission } = await readForm(request, reviewFormSchema);
   const intent = formData.get("intent");
   if (submission.status !== "success")
-    return { intent: typeof intent === "string" ? intent : "", lastResult: submission.reply() };
-  await take(scope, assessmentId, submission.value, origin);
+    return {
+      intent: typeof intent === "string" ? intent : "",
+      lastResult: submission.reply({ hideFields: ["proof"] }),
+    };
+  const form = submission.value;
+  const proven = form.intent === "release" ? await proveAgain(scope, form.proof) : { fault: null, scope };
+  if (proven.fault !== null)
+    return {
+      intent: form.intent,
+      lastResult: submission.reply({ hideFields: ["proof"], fieldErrors: { proof: [proven.fault] } }),
+    };
+  await take(proven.scope, assessmentId, form, origin);
   return null;
 }
 

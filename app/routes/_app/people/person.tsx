@@ -1,0 +1,145 @@
+import { data, Form, redirect } from "react-router";
+import { SubmitButton } from "#app/components/forms/SubmitButton.tsx";
+import { PageHead } from "#app/components/layout/PageHead.tsx";
+import { PasswordField } from "#app/components/people/PasswordField.tsx";
+import { PERSON_STATE_WORDS } from "#app/components/people/people-columns.tsx";
+import { RoleFields } from "#app/components/people/RoleFields.tsx";
+import { HungSection } from "#app/components/ui/HungSection.tsx";
+import { Notice } from "#app/components/ui/Notice.tsx";
+import { minuteOf } from "#app/lib/minute-of.ts";
+import { rolesSchema } from "#app/schemas/person-form.ts";
+import { scopeOf } from "#app/server/contexts.server.ts";
+import { postedForm } from "#app/server/form.server.ts";
+import { parseForm } from "#app/server/parse-form.server.ts";
+import { problem } from "#app/server/problem.server.ts";
+import { typedIn } from "#app/server/typed-in.server.ts";
+import { requireOnSite } from "#app/services/permission.server.ts";
+import { personPage } from "#app/services/people/list-people.server.ts";
+import {
+  changeRoles,
+  deactivatePerson,
+  inviteAgain,
+  reactivatePerson,
+} from "#app/services/people/manage-people.server.ts";
+import { proveAgain } from "#app/services/people/recent-proof.server.ts";
+import type { Route } from "./+types/person";
+
+const DONE = {
+  invited: "The invitation is on its way.",
+  roles: "The roles are changed. They count from the next page on.",
+  deactivated: "The account is deactivated, and every session of it has ended.",
+};
+
+export const meta: Route.MetaFunction = ({ loaderData }) => [
+  { title: `${loaderData?.person.name ?? "A person"} · Planeward` },
+];
+
+export async function loader({ context, params, url }: Route.LoaderArgs) {
+  const done = url.searchParams.get("done") ?? "";
+  return {
+    ...(await personPage(scopeOf(context), params.personId)),
+    done: Object.hasOwn(DONE, done) ? DONE[done as keyof typeof DONE] : null,
+  };
+}
+
+export async function action({ request, context, params: { personId } }: Route.ActionArgs) {
+  const scope = scopeOf(context);
+  requireOnSite(scope, "manage people");
+  const formData = await postedForm(request);
+  const intent = formData.get("intent");
+  const done = (what: keyof typeof DONE) => redirect(`/people/${personId}?done=${what}`);
+  if (intent === "invite") {
+    await inviteAgain(scope, personId);
+    throw done("invited");
+  }
+  if (intent === "deactivate") {
+    await deactivatePerson(scope, personId);
+    throw done("deactivated");
+  }
+  const proof = formData.get("proof");
+  const proven = await proveAgain(scope, typeof proof === "string" ? proof : "");
+  if (proven.fault !== null)
+    return data({ intent, proofFault: proven.fault, typed: typedIn(formData) }, { status: 400 });
+  if (intent === "reactivate") {
+    await reactivatePerson(proven.scope, personId);
+    throw done("invited");
+  }
+  const submission = parseForm(formData, rolesSchema);
+  if (submission.status !== "success")
+    throw problem(400, "These roles could not be read. Open the page again and choose from it.");
+  await changeRoles(proven.scope, personId, submission.value);
+  throw done("roles");
+}
+
+export default function PersonRoute({ loaderData, actionData }: Route.ComponentProps) {
+  const { person, programs, isSelf, proofAsked, done } = loaderData;
+  const { name, email, state, siteRole, lastSignInAt } = person;
+  const faultOf = (intent: string) => (actionData?.intent === intent ? actionData.proofFault : undefined);
+  return (
+    <>
+      <PageHead title={name} remark={PERSON_STATE_WORDS[state]} crumbs={[{ name: "People", path: "/people" }]} />
+      {done && !actionData && <Notice kind="done" title={done} />}
+      <p className="pb-4 wrap-anywhere">
+        {email}. {lastSignInAt === null ? "Has never signed in." : `Signed in last ${minuteOf(lastSignInAt)}.`}
+      </p>
+      <HungSection title="Roles">
+        {isSelf ? (
+          <p>This is your own account. Another administrator changes its roles or deactivates it.</p>
+        ) : (
+          <Form method="post" className="max-w-160 space-y-2">
+            <RoleFields
+              siteRole={siteRole ?? ""}
+              programs={programs}
+              typed={actionData?.typed}
+              proofAsked={proofAsked}
+              proofFault={faultOf("roles")}
+            />
+            <input type="hidden" name="intent" value="roles" />
+            <SubmitButton busy="Changing">Change the roles</SubmitButton>
+          </Form>
+        )}
+      </HungSection>
+      {!isSelf && (
+        <HungSection title="Account">
+          <div className="max-w-160 space-y-4">
+            {state === "invited" && <Deed intent="invite" button="Send the invitation again" busy="Sending" />}
+            {state !== "deactivated" ? (
+              <Deed intent="deactivate" button="Deactivate" busy="Deactivating" removes>
+                Every session and link ends at once. What they have done stays, under their name.
+              </Deed>
+            ) : (
+              <Form method="post" className="space-y-2">
+                <input type="hidden" name="intent" value="reactivate" />
+                <p>They get a mail with a link to set a new password, and are active once it is set.</p>
+                {proofAsked && (
+                  <PasswordField name="proof" label="Your password, to reactivate" error={faultOf("reactivate")} />
+                )}
+                <SubmitButton busy="Reactivating">Reactivate</SubmitButton>
+              </Form>
+            )}
+          </div>
+        </HungSection>
+      )}
+    </>
+  );
+}
+
+interface DeedProps {
+  intent: string;
+  button: string;
+  busy: string;
+  removes?: boolean;
+  children?: string;
+}
+
+function Deed({ intent, button, busy, removes = false, children }: DeedProps) {
+  return (
+    <Form method="post" className="space-y-2">
+      <input type="hidden" name="intent" value={intent} />
+      {children && <p>{children}</p>}
+      <SubmitButton busy={busy} removes={removes}>
+        {button}
+      </SubmitButton>
+    </Form>
+  );
+}

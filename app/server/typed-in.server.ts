@@ -1,0 +1,8 @@
+/** What was typed into a form, to be shown again; passwords are left out. */
+export function typedIn(formData: FormData): Record<string, string> {
+  return Object.fromEntries(
+    [...formData].flatMap(([name, value]) =>
+      typeof value === "string" && name !== "proof" && name !== "password" ? [[name, value]] : [],
+    ),
+  );
+}
