@@ -64,4 +64,6 @@ export interface TokensView {
   programs: { id: string; name: string }[];
   /** whether those of everybody are listed */
   ofAll: boolean;
+  /** whether the password is asked for before a token is made */
+  proofAsked: boolean;
 }

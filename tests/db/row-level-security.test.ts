@@ -162,10 +162,7 @@ describe("what a person keeps for themselves", () => {
     favourite: ["kind, record_id, at", "'film', gen_random_uuid(), now()"],
     saved_filter: ["list, name, query, at", "'/films', 'metals', 'kind=metal', now()"],
     preference: ["value, at", "'{}', now()"],
-    api_answer: [
-      "caller, key, request_hash, headers, body, at",
-      "gen_random_uuid(), 'k', 'x', '{}', '', now()",
-    ],
+    api_answer: ["caller, key, request_hash, headers, body, at", "gen_random_uuid(), 'k', 'x', '{}', '', now()"],
     mail_choice: ["value, unsubscribe_token, at", "'{}', gen_random_uuid()::text, now()"],
   };
   const insert = (table: string, person: string) => {

@@ -3,12 +3,15 @@ import { Form } from "react-router";
 import { ChoiceField } from "#app/components/forms/ChoiceField.tsx";
 import { LineField } from "#app/components/forms/LineField.tsx";
 import { SubmitButton } from "#app/components/forms/SubmitButton.tsx";
+import { PasswordField } from "#app/components/people/PasswordField.tsx";
 import { useRecordForm } from "#app/components/forms/use-record-form.ts";
 import { API_SCOPE_NAMES, API_SCOPES, TOKEN_LIVES, type ApiScope, type TokensView } from "#app/schemas/api-token.ts";
 
 interface Props {
   programs: TokensView["programs"];
   lastResult: SubmissionResult<string[]> | undefined;
+  proofAsked: boolean;
+  proofFault: string | undefined;
 }
 
 interface Values extends Record<string, unknown> {
@@ -21,7 +24,7 @@ interface Values extends Record<string, unknown> {
 const LIVES = TOKEN_LIVES.map((days) => ({ value: String(days), label: `${days}\u00A0days` }));
 
 /** The form in which a person makes a token. */
-export function MakeToken({ programs, lastResult }: Props) {
+export function MakeToken({ programs, lastResult, proofAsked, proofFault }: Props) {
   const [form, { name, program, scopes, days }] = useRecordForm<Values>({
     id: "token",
     lastResult,
@@ -44,6 +47,7 @@ export function MakeToken({ programs, lastResult }: Props) {
         />
         <Scopes field={scopes} />
         <ChoiceField field={days} label="Good for" choices={LIVES} hint="It can be revoked at any time." />
+        {proofAsked && <PasswordField name="proof" label="Your password, to make it" error={proofFault} />}
         <SubmitButton busy="Making">Make the token</SubmitButton>
       </Form>
     </section>

@@ -11,10 +11,12 @@ interface Props extends TokensView {
   revoked: boolean;
   made: string | null;
   lastResult: SubmissionResult<string[]> | undefined;
+  /** what stands at the field of the password */
+  proofFault: string | undefined;
 }
 
 /** The tokens with which other programs ask the API in the reader's name, and the form to make one. */
-export function TokensPage({ rows, programs, ofAll, revoked, made, lastResult }: Props) {
+export function TokensPage({ rows, programs, ofAll, proofAsked, revoked, made, lastResult, proofFault }: Props) {
   return (
     <>
       <PageHead title="API tokens" remark={ofAll ? "of everybody on the site" : "your own"} />
@@ -31,7 +33,15 @@ export function TokensPage({ rows, programs, ofAll, revoked, made, lastResult }:
         for what the token is made for, and never more than you may do yourself. Keep it like a password.
       </p>
       <div className="grid items-start gap-6 wide:grid-cols-[minmax(0,1fr)_480px]">
-        {programs.length > 0 && <MakeToken key={made ?? rows.length} programs={programs} lastResult={lastResult} />}
+        {programs.length > 0 && (
+          <MakeToken
+            key={made ?? rows.length}
+            programs={programs}
+            lastResult={lastResult}
+            proofAsked={proofAsked}
+            proofFault={proofFault}
+          />
+        )}
         <div className="min-w-0 wide:-order-1">
           {rows.length === 0 ? (
             <EmptyState title="No token has been made">

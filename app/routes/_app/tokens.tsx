@@ -5,6 +5,7 @@ import { scopeOf } from "#app/server/contexts.server.ts";
 import { postedForm } from "#app/server/form.server.ts";
 import { parseForm } from "#app/server/parse-form.server.ts";
 import { problem } from "#app/server/problem.server.ts";
+import { proveAgain } from "#app/services/people/recent-proof.server.ts";
 import { makeToken, revokeToken, tokensView } from "#app/services/api/tokens.server.ts";
 import type { Route } from "./+types/tokens";
 
@@ -24,17 +25,35 @@ export async function action({ request, context }: Route.ActionArgs) {
     throw redirect("/tokens?done=revoked");
   }
   const submission = parseForm(formData, newTokenSchema);
-  if (submission.status !== "success") return data({ lastResult: submission.reply(), made: null }, { status: 400 });
-  const made = await makeToken(scope, submission.value);
+  if (submission.status !== "success")
+    return data({ lastResult: submission.reply(), made: null, proofFault: undefined }, { status: 400 });
+  const proof = formData.get("proof");
+  const proven = await proveAgain(scope, typeof proof === "string" ? proof : "");
+  if (proven.fault !== null)
+    return data(
+      { lastResult: submission.reply({ formErrors: [proven.fault] }), made: null, proofFault: proven.fault },
+      { status: 400 },
+    );
+  const made = await makeToken(proven.scope, submission.value);
   if ("refused" in made)
     return data(
-      { lastResult: submission.reply({ fieldErrors: { name: [made.refused] } }), made: null },
+      { lastResult: submission.reply({ fieldErrors: { name: [made.refused] } }), made: null, proofFault: undefined },
       { status: 409 },
     );
   // Shown by the answer to the form itself: a token has no place in an address or a history.
-  return data({ lastResult: undefined, made: made.token }, { headers: { "Cache-Control": "no-store" } });
+  return data(
+    { lastResult: undefined, made: made.token, proofFault: undefined },
+    { headers: { "Cache-Control": "no-store" } },
+  );
 }
 
 export default function Tokens({ loaderData, actionData }: Route.ComponentProps) {
-  return <TokensPage {...loaderData} made={actionData?.made ?? null} lastResult={actionData?.lastResult} />;
+  return (
+    <TokensPage
+      {...loaderData}
+      made={actionData?.made ?? null}
+      lastResult={actionData?.lastResult}
+      proofFault={actionData?.proofFault}
+    />
+  );
 }

@@ -4,6 +4,7 @@ import { mayOnSite, programsWhere } from "#app/policies/permissions.ts";
 import type { NewToken, TokenRow, TokensView } from "#app/schemas/api-token.ts";
 import { notFound, problem } from "#app/server/problem.server.ts";
 import { inScope, type ActorScope } from "#app/server/scope.server.ts";
+import { isProvenLately, requireRecentProof } from "../people/recent-proof.server.ts";
 import { requireInProgram, requireInSomeProgram } from "../permission.server.ts";
 import { idFrom } from "../uuid.server.ts";
 
@@ -52,16 +53,18 @@ export async function tokensView(scope: ActorScope): Promise<TokensView> {
       rows: rows.toSorted((a, b) => Number(b.state === "good") - Number(a.state === "good")),
       programs: programs.map(({ programId, programName }) => ({ id: programId, name: programName })),
       ofAll,
+      proofAsked: !isProvenLately(scope),
     };
   });
 }
 
-/** Makes a token in the actor's own name. The token itself is in what comes back and nowhere else. */
+/** Makes a token in the actor's own name, who has just proved to be that. The token itself is in what comes back and nowhere else. */
 export async function makeToken(
   scope: ActorScope,
   { name, program, scopes, days }: NewToken,
 ): Promise<{ token: string } | { refused: string }> {
   requireInProgram(scope, "see released sheets", program, "program");
+  requireRecentProof(scope);
   return inScope(scope, async (em) => {
     await em.execute("select pg_advisory_xact_lock(hashtextextended(?, 0))", [`tokens of ${scope.actor.id}`]);
     const now = new Date();
