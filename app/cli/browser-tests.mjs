@@ -23,7 +23,7 @@ const databaseName = "planeward_browser";
  *
  * @param {import("./checks.mjs").Checks} checks
  * @param {{ folder: string, database: import("./database.mjs").Database, accountsFile: string }} options
- * @returns {Promise<{ port: number, logFile: string, ownerUrl: string }>}
+ * @returns {Promise<{ port: number, logFile: string, mailFolder: string, ownerUrl: string }>}
  */
 async function serveForTests({ keeper, env }, { folder, database, accountsFile }) {
   const access = accessTo(database, databaseName);
@@ -31,15 +31,16 @@ async function serveForTests({ keeper, env }, { folder, database, accountsFile }
   await prepareDatabase(keeper, access, { accountsFile, env });
   const port = await freePort();
   const logFile = join(folder, "server.log");
+  const mailFolder = join(folder, "mail");
   const served = await mailSettings(keeper, {
     env: { ...env, DATABASE_URL: access.appUrl, SMTP_URL: undefined },
     address: `http://${loopback}:${port}`,
-    folder: join(folder, "mail"),
+    folder: mailFolder,
     own: true,
   });
   await serveBuild(keeper, { port, logFile, env: served });
   keepWorker(keeper, { env: { ...served, NODE_ENV: "production" }, logFile: join(folder, "worker.log") });
-  return { port, logFile, ownerUrl: access.ownerUrl };
+  return { port, logFile, mailFolder, ownerUrl: access.ownerUrl };
 }
 
 /**
@@ -49,7 +50,7 @@ async function serveForTests({ keeper, env }, { folder, database, accountsFile }
  */
 async function runPlaywright(checks, { folder, database, filters }) {
   const accountsFile = join(folder, "demo-accounts.json");
-  const { port, logFile, ownerUrl } = await serveForTests(checks, { folder, database, accountsFile });
+  const { port, logFile, ownerUrl, mailFolder } = await serveForTests(checks, { folder, database, accountsFile });
   const report = join(folder, "playwright.json");
   const home = join(folder, "home");
   mkdirSync(home);
@@ -62,6 +63,8 @@ async function runPlaywright(checks, { folder, database, filters }) {
         DEMO_ACCOUNTS_FILE: accountsFile,
         // For what no page can set up, such as a program that nobody belongs to.
         DATABASE_OWNER_URL: ownerUrl,
+        // Mail to somebody who cannot sign in yet is read where it lies.
+        DEMO_MAIL_FOLDER: mailFolder,
         PLAYWRIGHT_JSON_OUTPUT_FILE: report,
         // The browser writes into its user's home.
         HOME: home,
