@@ -1,15 +1,19 @@
 import { subscribe } from "node:diagnostics_channel";
 import type { IncomingMessage, ServerResponse } from "node:http";
+import { siteIsOverTls } from "./over-tls.server.ts";
 
 /** Header that carries the peer's address to loaders; whatever a client sent under this name is overwritten. */
 export const PEER_HEADER = "x-planeward-peer";
+
+/** A year, and whatever is below this host. */
+const STRICT_TRANSPORT = "max-age=31536000; includeSubDomains";
 
 const kept = globalThis as { planewardWatchesConnections?: boolean };
 
 /**
  * The production server answers static files before any middleware runs and hands no peer address on. Node announces every
  * request before it is handled, which is early enough for both: the address goes into a header of ours, and every answer, files
- * included, is marked as not to be sniffed.
+ * included, is marked as not to be sniffed and, where the site is reached over TLS, as never to be asked for without.
  */
 export function watchConnections(): void {
   if (kept.planewardWatchesConnections) return;
@@ -17,6 +21,8 @@ export function watchConnections(): void {
   subscribe("http.server.request.start", (message) => {
     const { request, response } = message as { request: IncomingMessage; response: ServerResponse };
     request.headers[PEER_HEADER] = request.socket.remoteAddress ?? "";
-    if (!response.headersSent) response.setHeader("X-Content-Type-Options", "nosniff");
+    if (response.headersSent) return;
+    response.setHeader("X-Content-Type-Options", "nosniff");
+    if (siteIsOverTls) response.setHeader("Strict-Transport-Security", STRICT_TRANSPORT);
   });
 }
