@@ -152,6 +152,7 @@ export default [
       route("new", "routes/_app/people/new.tsx"),
       route(":personId", "routes/_app/people/person.tsx"),
     ]),
+    route("account", "routes/_app/account.tsx"),
     route("settings", "routes/_app/settings.tsx"),
     route("api", "routes/_app/api.tsx"),
     route("tokens", "routes/_app/tokens.tsx"),

@@ -67,6 +67,16 @@ test.describe("people", () => {
     await theirs.getByRole("button", { name: "Sign in" }).click();
     await expect(theirs.getByRole("heading", { level: 1, name: "Today" })).toBeVisible();
     expect((await theirs.goto("/stacks"))?.status()).toBe(200);
+    await theirs.goto("/account");
+    await expectNoAxeFindings(theirs);
+    await theirs.getByLabel("Password now", { exact: true }).fill("not this one at all");
+    await theirs.getByLabel("New password", { exact: true }).fill("copper over the glass");
+    await theirs.getByRole("button", { name: "Change the password" }).click();
+    await expect(theirs.getByText("This is not your password.")).toBeVisible();
+    await theirs.getByLabel("Password now", { exact: true }).fill("glass under the copper");
+    await theirs.getByLabel("New password", { exact: true }).fill("copper over the glass");
+    await theirs.getByRole("button", { name: "Change the password" }).click();
+    await expect(theirs.getByText("Your password is changed")).toBeVisible();
     // The link works once, and what one role may not stays shut.
     expect((await theirs.goto(link))?.status()).toBe(404);
     expect((await theirs.goto("/people"))?.status()).toBe(403);
@@ -79,7 +89,7 @@ test.describe("people", () => {
     await page.goto(`/people?q=${address}`);
     await expect(page.getByRole("link", { name: "Nora Vale" })).toBeVisible();
     await page.setViewportSize(PHONE);
-    for (const path of ["/people", "/people/new", account]) {
+    for (const path of ["/people", "/people/new", account, "/account"]) {
       await page.goto(path);
       const over = () => document.documentElement.scrollWidth - document.documentElement.clientWidth;
       expect(await page.evaluate(over)).toBe(0);

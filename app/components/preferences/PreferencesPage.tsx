@@ -43,9 +43,14 @@ export function PreferencesPage({ preferences, saved }: Props) {
         title="Preferences"
         remark="For you alone, wherever you sign in"
         actions={
-          <Link to="/preferences/mail" className="btn">
-            E-mail
-          </Link>
+          <>
+            <Link to="/account" className="btn">
+              Account
+            </Link>
+            <Link to="/preferences/mail" className="btn">
+              E-mail
+            </Link>
+          </>
         }
       />
       {saved && <Notice kind="done" title="Your preferences are saved." />}

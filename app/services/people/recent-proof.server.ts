@@ -29,17 +29,25 @@ export async function proveAgain(
   password: string,
 ): Promise<{ fault: string; scope: null } | { fault: null; scope: ActorScope }> {
   if (isProvenLately(scope)) return { fault: null, scope };
-  const { actor, session, requestId } = scope;
-  const refused = (fault: string) => ({ fault, scope: null });
+  const { actor, session } = scope;
   if (!session) throw problem(403, "This is done in a browser, by somebody who is signed in.");
-  if (password === "") return refused("Type your password: you signed in more than ten minutes ago.");
-  const counted = [["account from address", `${actor.email} session ${actor.id}`]] as const;
-  if (!(await countAttempt(counted)))
-    return refused("Too many attempts have failed. Wait a quarter of an hour, then try again.");
-  if ((await personWithPassword(actor.email, password, requestId)) !== actor.id)
-    return refused("This is not your password. Type it once more.");
-  await forgiveAttempt(counted);
+  const fault =
+    password === ""
+      ? "Type your password: you signed in more than ten minutes ago."
+      : await ownPasswordFault(scope, password);
+  if (fault !== null) return { fault, scope: null };
   const provenAt = new Date();
   await inScope(scope, (em) => em.nativeUpdate(Session, { id: session.id, person: actor.id }, { provenAt }));
   return { fault: null, scope: { ...scope, session: { id: session.id, provenAt: provenAt.getTime() } } };
+}
+
+/** Why this is not taken for the person's own password, as a sentence; null where it is. Guesses are counted. */
+export async function ownPasswordFault({ actor, requestId }: ActorScope, password: string): Promise<string | null> {
+  const counted = [["account from address", `${actor.email} session ${actor.id}`]] as const;
+  if (!(await countAttempt(counted)))
+    return "Too many attempts have failed. Wait a quarter of an hour, then try again.";
+  if ((await personWithPassword(actor.email, password, requestId)) !== actor.id)
+    return "This is not your password. Type it once more.";
+  await forgiveAttempt(counted);
+  return null;
 }
