@@ -43,10 +43,10 @@ beforeAll(async () => {
 
 /** The engineer as they stand now, whoever they stand in for. */
 async function engineer(): Promise<ActorScope> {
-  const { actor } = await scopeOfPerson(database, "engineer");
+  const { actor, ...asked } = await scopeOfPerson(database, "engineer");
   const now = await (await actors()).actorById(actor.id, "test");
   if (!now) throw new Error("The engineer is gone.");
-  return { actor: now, requestId: "test" };
+  return { ...asked, actor: now };
 }
 
 async function name(by: ActorScope, days: [from: number, until: number], whom?: string) {

@@ -123,9 +123,12 @@ describe("what lies beyond a person's reach", () => {
       const { groups } = await found(guest, query);
       for (const { kind } of groups) expect(["place", "method"]).toContain(kind);
       for (const { path } of groups.flatMap(({ rows }) => rows))
-        expect(path).toMatch(/^\/(sheets|method.*|preferences(\/mail)?|search)?$/);
+        expect(path).toMatch(/^\/(sheets|method.*|preferences(\/mail)?|search|account|tokens|api)?$/);
     }
-    expect(namesOf(await found(guest, "e"), "place")).toEqual(["E-mail", "Sheets", "Method", "Preferences"]);
+    expect(namesOf(await found(guest, "e"), "place")).toEqual([
+      ...["E-mail", "Sheets", "Method", "Preferences"],
+      ...["Account", "API tokens", "API"],
+    ]);
   });
 
   test("an administrator finds the library and nothing of the programs' work", async () => {
