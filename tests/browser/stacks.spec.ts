@@ -114,6 +114,8 @@ test.describe("an engineer", () => {
     const spread = page.getByRole("region", { name: "Wafers beyond a warp" });
     await field(page, "siliconThickness.value").fill("600 um");
     await field(page, "siliconThickness.tolerance").fill("20 um");
+    // It comes to who goes there.
+    await spread.scrollIntoViewIfNeeded();
     await spread.getByLabel("Largest warp").fill("12 parsecs");
     await expect(spread.getByRole("button", { name: "Draw wafers" })).toBeDisabled();
     await spread.getByLabel("Largest warp").fill("2 mm");

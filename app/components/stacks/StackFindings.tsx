@@ -33,11 +33,16 @@ export const StackFindings = memo(function StackFindings(props: Props) {
       <StackChart name={name} panel={panel} overlay={overlay} limits={limits} options={options} />
       <FilmForces estimated={panel.room} names={names} />
       <BowModels estimated={panel.room} />
-      <OnceNear className="min-h-30 scriptless:hidden">
-        <Suspense>
-          <WarpSpread estimated={panel.room} />
-        </Suspense>
-      </OnceNear>
+      <section className="border-t border-line px-4 py-3 tablet:px-6 scriptless:hidden" aria-labelledby="spread">
+        <h3 id="spread" className="font-semibold">
+          Wafers beyond a warp
+        </h3>
+        <OnceNear className="min-h-20">
+          <Suspense>
+            <WarpSpread estimated={panel.room} />
+          </Suspense>
+        </OnceNear>
+      </section>
       <AssumedInputs draft={draft} />
       <StackWorkings estimated={panel.room} names={names} />
     </>

@@ -1,4 +1,4 @@
-import { memo, useId, useState, type KeyboardEvent } from "react";
+import { memo, useState, type KeyboardEvent } from "react";
 import { noBreak } from "#app/components/drawings/no-break.ts";
 import { RunProgress } from "#app/components/ui/RunProgress.tsx";
 import { TextField } from "#app/components/ui/TextField.tsx";
@@ -13,7 +13,6 @@ const FIRST_LIMIT = "400 µm";
 
 /** How many wafers with this stack would exceed a warp, by drawing wafers within the tolerances given. */
 export const WarpSpread = memo(function WarpSpread({ estimated: { request, answer } }: { estimated: Estimated }) {
-  const id = useId();
   const [typed, setTyped] = useState(FIRST_LIMIT);
   const { state, key: asked, start, stop } = useWarpSampling();
   const limit = readQuantity(typed, RULES.warpLimit);
@@ -29,10 +28,7 @@ export const WarpSpread = memo(function WarpSpread({ estimated: { request, answe
     ask();
   };
   return (
-    <section className="border-t border-line px-4 py-3 tablet:px-6" aria-labelledby={id}>
-      <h3 id={id} className="font-semibold">
-        Wafers beyond a warp
-      </h3>
+    <>
       {why !== null ? (
         <p className="text-quiet">{why}</p>
       ) : (
@@ -79,7 +75,7 @@ export const WarpSpread = memo(function WarpSpread({ estimated: { request, answe
           </div>
         </>
       )}
-    </section>
+    </>
   );
 });
 
