@@ -20,23 +20,24 @@ type Limit = keyof typeof LIMITS;
 /** Something that is counted: of which limit, and what of; the latter is kept as its SHA-256. */
 export type Counted = readonly [limit: Limit, of: string];
 
-const limiters = new Map<Limit, Promise<RateLimiterPostgres>>();
+/** Kept by its ORM, so that a process that connects anew counts over the new connection. */
+const limiters = new WeakMap<object, Map<Limit, RateLimiterPostgres>>();
 
-function limiterOf(limit: Limit): Promise<RateLimiterPostgres> {
-  const known = limiters.get(limit);
-  if (known) return known;
-  const made = orm().then(
-    ({ em }) =>
-      new RateLimiterPostgres({
-        storeClient: em.getConnection().getKnex(),
-        storeType: "knex",
-        tableName: "rate_limit",
-        tableCreated: true,
-        keyPrefix: limit,
-        ...LIMITS[limit],
-      }),
-  );
-  limiters.set(limit, made);
+async function limiterOf(limit: Limit): Promise<RateLimiterPostgres> {
+  const connected = await orm();
+  const known = limiters.get(connected) ?? new Map<Limit, RateLimiterPostgres>();
+  limiters.set(connected, known);
+  const there = known.get(limit);
+  if (there) return there;
+  const made = new RateLimiterPostgres({
+    storeClient: connected.em.getConnection().getKnex(),
+    storeType: "knex",
+    tableName: "rate_limit",
+    tableCreated: true,
+    keyPrefix: limit,
+    ...LIMITS[limit],
+  });
+  known.set(limit, made);
   return made;
 }
 

@@ -1,8 +1,9 @@
-import { createHash, randomBytes, randomUUID } from "node:crypto";
+import { randomBytes, randomUUID } from "node:crypto";
 import { Person } from "#app/db/entities/person.ts";
 import { Session } from "#app/db/entities/session.ts";
 import type { Actor } from "#app/policies/roles.ts";
 import { inScope, type SessionOfScope } from "#app/server/scope.server.ts";
+import { secretDigest } from "#app/server/secret-digest.server.ts";
 import { actorOf } from "./actor.server.ts";
 
 const MINUTE = 60_000;
@@ -15,7 +16,6 @@ const OLD_TOKEN_GRACE = MINUTE;
 /** `lastSeenAt` is written at most this often, so that reading pages does not write. */
 const NOTE_USE_AFTER = MINUTE;
 
-const digest = (token: string) => createHash("sha256").update(token).digest("hex");
 const newToken = () => randomBytes(32).toString("base64url");
 
 /** A session just made: the token for the cookie, and when it ends at the latest. */
@@ -33,7 +33,7 @@ export async function startSession(personId: string, userAgent: string, requestI
     em.create(Session, {
       id: randomUUID(),
       person: personId,
-      tokenHash: digest(token),
+      tokenHash: secretDigest(token),
       previousTokenHash: null,
       rotatedAt: now,
       createdAt: now,
@@ -54,7 +54,7 @@ export async function resumeSession(
   requestId: string,
 ): Promise<{ actor: Actor; session: SessionOfScope; renewed: StartedSession | null } | null> {
   return inScope({ personId: null, atTheDoor: true, requestId }, async (em) => {
-    const hash = digest(token);
+    const hash = secretDigest(token);
     const session = await em.findOne(
       Session,
       { $or: [{ tokenHash: hash }, { previousTokenHash: hash }] },
@@ -70,7 +70,7 @@ export async function resumeSession(
     if (current && session.rotatedAt.getTime() + ROTATE_AFTER <= now) {
       const next = newToken();
       session.previousTokenHash = hash;
-      session.tokenHash = digest(next);
+      session.tokenHash = secretDigest(next);
       session.rotatedAt = new Date(now);
       renewed = { token: next, expiresAt: session.expiresAt };
     }
@@ -84,7 +84,7 @@ export async function resumeSession(
 /** Ends the session of a token; one that is already gone is no error. */
 export async function endSession(token: string, requestId: string): Promise<void> {
   await inScope({ personId: null, atTheDoor: true, requestId }, async (em) => {
-    const hash = digest(token);
+    const hash = secretDigest(token);
     await em.nativeDelete(Session, { $or: [{ tokenHash: hash }, { previousTokenHash: hash }] });
   });
 }

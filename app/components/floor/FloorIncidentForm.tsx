@@ -3,7 +3,9 @@ import { ChoiceField, sameWords } from "#app/components/forms/ChoiceField.tsx";
 import { LineField } from "#app/components/forms/LineField.tsx";
 import { NoteField } from "#app/components/forms/NoteField.tsx";
 import { useRecordForm } from "#app/components/forms/use-record-form.ts";
+import { CountFields } from "#app/components/incidents/CountFields.tsx";
 import { PhotoField } from "#app/components/incidents/PhotoField.tsx";
+import { ShardCaution } from "#app/components/incidents/ShardCaution.tsx";
 import { SpotFields } from "#app/components/incidents/SpotFields.tsx";
 import { floorPath } from "#app/lib/floor/floor-path.ts";
 import { INCIDENT_KINDS, SEVERITIES } from "#app/schemas/incident.ts";
@@ -42,11 +44,7 @@ export function FloorIncidentForm({ lot, sheet, step, newId, lastResult }: Props
         Lot {lot.name}, step {step.number}, {step.title}
       </p>
       <h1 className="text-answer font-medium">Report an incident</h1>
-      <p>
-        If somebody is hurt or in danger, follow the site’s emergency procedure first. Thin silicon breaks into
-        razor-sharp shards: eye and hand protection before you touch anything, and leave the pieces to the site’s
-        procedure for broken wafers.
-      </p>
+      <ShardCaution />
       <input type="hidden" name="intent" value="incident" />
       <input type="hidden" name="id" value={newId} />
       <input type="hidden" name="revision" value={sheet.pin.revision} />
@@ -62,19 +60,7 @@ export function FloorIncidentForm({ lot, sheet, step, newId, lastResult }: Props
         hint="The worst that came of it"
       />
       <LineField field={fields.wafer} label="Wafer" hint="Its name, or its slot. Blank: several, or not known" />
-      <LineField field={fields.affected} label="Wafers it happened to" input={{ inputMode: "numeric" }} />
-      <LineField
-        field={fields.broken}
-        label="Of these broken or scrapped"
-        hint="0 for none"
-        input={{ inputMode: "numeric" }}
-      />
-      <LineField
-        field={fields.through}
-        label="Wafers of the lot that went through this step"
-        hint="These among them. Blank: not known"
-        input={{ inputMode: "numeric" }}
-      />
+      <CountFields affected={fields.affected} broken={fields.broken} through={fields.through} />
       <NoteField field={fields.words} label="In your words" rows={4} hint="What was seen, heard and done" />
       <PhotoField id="photos" faults={lastResult?.error?.["photos"] ?? []} again={Boolean(lastResult?.error)} />
       <SpotFields radius={fields.radius} azimuth={fields.azimuth} />

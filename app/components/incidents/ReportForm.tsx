@@ -7,6 +7,7 @@ import { NoteField } from "#app/components/forms/NoteField.tsx";
 import { SubmitButton } from "#app/components/forms/SubmitButton.tsx";
 import { useRecordForm } from "#app/components/forms/use-record-form.ts";
 import { INCIDENT_KINDS, SEVERITIES, type ReportGround } from "#app/schemas/incident.ts";
+import { CountFields } from "./CountFields.tsx";
 import { PhotoField } from "./PhotoField.tsx";
 import { SpotFields } from "./SpotFields.tsx";
 
@@ -95,19 +96,7 @@ export function ReportForm({ ground, lastResult }: Props) {
               hint="Its name, or its slot. Blank: several, or not known"
               input={{ autoComplete: "off" }}
             />
-            <LineField field={fields.affected} label="Wafers it happened to" input={{ inputMode: "numeric" }} />
-            <LineField
-              field={fields.broken}
-              label="Of these broken or scrapped"
-              hint="0 for none"
-              input={{ inputMode: "numeric" }}
-            />
-            <LineField
-              field={fields.through}
-              label="Wafers of the lot that went through this step"
-              hint="These among them. Rates count by it; blank: not known"
-              input={{ inputMode: "numeric" }}
-            />
+            <CountFields affected={fields.affected} broken={fields.broken} through={fields.through} />
             <LineField
               field={fields.occurredAt}
               label="Happened at, UTC"

@@ -4,6 +4,7 @@ import { PageHead } from "#app/components/layout/PageHead.tsx";
 import { EmptyState } from "#app/components/ui/EmptyState.tsx";
 import type { ReportGround } from "#app/schemas/incident.ts";
 import { ReportForm } from "./ReportForm.tsx";
+import { ShardCaution } from "./ShardCaution.tsx";
 
 interface Props {
   choices: { value: string; label: string }[];
@@ -29,11 +30,7 @@ export function ReportPage({ choices, ground, lastResult }: Props) {
           )
         }
       />
-      <p className="mb-4 max-w-160">
-        If somebody is hurt or in danger, follow the site’s emergency procedure first. Thin silicon breaks into
-        razor-sharp shards: eye and hand protection before you touch anything, and leave the pieces to the site’s
-        procedure for broken wafers.
-      </p>
+      <ShardCaution className="mb-4 max-w-160" />
       {ground ? (
         <ReportForm key={ground.assessment.id} ground={ground} lastResult={lastResult} />
       ) : choices.length > 0 ? (

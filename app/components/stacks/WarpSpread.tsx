@@ -27,54 +27,49 @@ export const WarpSpread = memo(function WarpSpread({ estimated: { request, answe
     event.preventDefault();
     ask();
   };
+  if (why !== null) return <p className="text-quiet">{why}</p>;
   return (
     <>
-      {why !== null ? (
-        <p className="text-quiet">{why}</p>
-      ) : (
-        <>
-          <div className="mt-1 flex flex-wrap items-start gap-3">
-            <TextField
-              name="spread-limit"
-              label="Largest warp"
-              className="w-36"
-              value={typed}
-              hint={limit.ok ? <Understood text={limit.understood} dimension="length" /> : undefined}
-              error={limit.ok ? undefined : limit.message}
-              autoComplete="off"
-              onChange={(event) => setTyped(event.currentTarget.value)}
-              onKeyDown={onEnter}
-            />
-            {state.kind === "running" ? (
-              <button type="button" className="btn mt-5" onClick={stop}>
-                Stop
-              </button>
-            ) : (
-              <button type="button" className="btn mt-5" onClick={ask} disabled={!limit.ok}>
-                Draw wafers
-              </button>
-            )}
-            {state.kind === "running" && (
-              <div className="mt-6">
-                <RunProgress done={state.done} of={state.of} label="Wafers drawn" />
-              </div>
-            )}
+      <div className="mt-1 flex flex-wrap items-start gap-3">
+        <TextField
+          name="spread-limit"
+          label="Largest warp"
+          className="w-36"
+          value={typed}
+          hint={limit.ok ? <Understood text={limit.understood} dimension="length" /> : undefined}
+          error={limit.ok ? undefined : limit.message}
+          autoComplete="off"
+          onChange={(event) => setTyped(event.currentTarget.value)}
+          onKeyDown={onEnter}
+        />
+        {state.kind === "running" ? (
+          <button type="button" className="btn mt-5" onClick={stop}>
+            Stop
+          </button>
+        ) : (
+          <button type="button" className="btn mt-5" onClick={ask} disabled={!limit.ok}>
+            Draw wafers
+          </button>
+        )}
+        {state.kind === "running" && (
+          <div className="mt-6">
+            <RunProgress done={state.done} of={state.of} label="Wafers drawn" />
           </div>
-          <div aria-live="polite">
-            {state.kind === "failed" && <p className="mt-1 text-stop">{state.why}</p>}
-            {state.kind === "done" && (
-              <p className={`mt-1 ${asked === key ? "" : "text-quiet"}`}>
-                {asked !== key && "Of the stack before the last change: "}
-                {spreadSentences(state.found).map((sentence) => (
-                  <span key={sentence} className="block">
-                    {noBreak(sentence)}
-                  </span>
-                ))}
-              </p>
-            )}
-          </div>
-        </>
-      )}
+        )}
+      </div>
+      <div aria-live="polite">
+        {state.kind === "failed" && <p className="mt-1 text-stop">{state.why}</p>}
+        {state.kind === "done" && (
+          <p className={`mt-1 ${asked === key ? "" : "text-quiet"}`}>
+            {asked !== key && "Of the stack before the last change: "}
+            {spreadSentences(state.found).map((sentence) => (
+              <span key={sentence} className="block">
+                {noBreak(sentence)}
+              </span>
+            ))}
+          </p>
+        )}
+      </div>
     </>
   );
 });

@@ -7,6 +7,23 @@ import { SOURCE_KINDS } from "#app/engine/vocabulary.ts";
 export const moment = z.iso.datetime().describe("UTC");
 export const id = z.uuid();
 export const named = z.object({ id, name: z.string() });
+/** Silicon that a stack or a flow is on. */
+export const siliconUsed = z.object({
+  ...named.shape,
+  diameter_m: z.number(),
+  orientation: z.enum(["100", "111"]),
+});
+export const siliconJson = (silicon: {
+  id: string;
+  name: string;
+  diameter: number;
+  orientation: "100" | "111";
+}): z.input<typeof siliconUsed> => ({
+  id: silicon.id,
+  name: silicon.name,
+  diameter_m: silicon.diameter,
+  orientation: silicon.orientation,
+});
 export const programSlug = z.string().describe("Short name of the program, such as tern.");
 export const programQuery = { program: z.string().max(80).optional().describe("Short name of a program.") };
 

@@ -2,8 +2,9 @@ import { ApiToken } from "#app/db/entities/api-token.ts";
 import type { Actor } from "#app/policies/roles.ts";
 import type { ApiScope } from "#app/schemas/api-token.ts";
 import { inScope } from "#app/server/scope.server.ts";
+import { secretDigest } from "#app/server/secret-digest.server.ts";
 import { actorOf } from "../actor.server.ts";
-import { TOKEN_PREFIX, tokenDigest } from "./tokens.server.ts";
+import { TOKEN_PREFIX } from "./tokens.server.ts";
 
 /** `lastUsedAt` is written at most this often, so that reading does not write. */
 const NOTE_USE_AFTER = 60_000;
@@ -24,7 +25,7 @@ export interface TokenBearer {
 export function bearerOf(token: string, requestId: string): Promise<TokenBearer | null> {
   if (!SHAPE.test(token)) return Promise.resolve(null);
   return inScope({ personId: null, atTheDoor: true, requestId }, async (em) => {
-    const found = await em.findOne(ApiToken, { tokenHash: tokenDigest(token) }, { populate: ["person"] });
+    const found = await em.findOne(ApiToken, { tokenHash: secretDigest(token) }, { populate: ["person"] });
     const now = new Date();
     if (!found || found.revokedAt || found.expiresAt <= now || !found.person.active) return null;
     const programId = found.program.id;

@@ -1,9 +1,10 @@
-import { createHash, randomBytes, randomUUID } from "node:crypto";
+import { randomBytes, randomUUID } from "node:crypto";
 import { ApiToken } from "#app/db/entities/api-token.ts";
 import { mayOnSite, programsWhere } from "#app/policies/permissions.ts";
 import type { NewToken, TokenRow, TokensView } from "#app/schemas/api-token.ts";
 import { notFound, problem } from "#app/server/problem.server.ts";
 import { inScope, type ActorScope } from "#app/server/scope.server.ts";
+import { secretDigest } from "#app/server/secret-digest.server.ts";
 import { isProvenLately, requireRecentProof } from "../people/recent-proof.server.ts";
 import { requireInProgram, requireInSomeProgram } from "../permission.server.ts";
 import { idFrom } from "../uuid.server.ts";
@@ -17,8 +18,6 @@ const MOST = 20;
 /** How many are listed: those of years ago are found in the audit trail. */
 const LISTED = 200;
 const DAY = 24 * 3600e3;
-
-export const tokenDigest = (token: string) => createHash("sha256").update(token).digest("hex");
 
 const stateOf = ({ revokedAt, expiresAt }: Pick<ApiToken, "revokedAt" | "expiresAt">) =>
   revokedAt ? "revoked" : expiresAt <= new Date() ? "expired" : "good";
@@ -76,7 +75,7 @@ export async function makeToken(
       person: scope.actor.id,
       program,
       name,
-      tokenHash: tokenDigest(token),
+      tokenHash: secretDigest(token),
       beginning: token.slice(0, BEGINNING),
       scopes: [...new Set(scopes)],
       createdAt: now,

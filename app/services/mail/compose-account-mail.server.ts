@@ -1,10 +1,11 @@
-import { createHash, randomBytes } from "node:crypto";
+import { randomBytes } from "node:crypto";
 import type { MailOutbox } from "#app/db/entities/mail-outbox.ts";
 import { PersonToken } from "#app/db/entities/person-token.ts";
 import { Person } from "#app/db/entities/person.ts";
 import { TOKEN_PURPOSES, type AccountMail } from "#app/lib/account-mail.ts";
 import { environment } from "#app/server/environment.server.ts";
 import { inScope, type Scope } from "#app/server/scope.server.ts";
+import { secretDigest } from "#app/server/secret-digest.server.ts";
 import { accountLetter } from "./account-letter.ts";
 import type { Letter } from "./letter.ts";
 
@@ -34,7 +35,7 @@ export async function composeAccountMail(
     const token = await em.findOne(PersonToken, { id: key, endedAt: null, expiresAt: { $gt: new Date() } });
     if (!token) return false;
     await em.execute("update person_token set secret_hashes = secret_hashes || ?::text where id = ?", [
-      hashOfSecret(secret),
+      secretDigest(secret),
       token.id,
     ]);
     return true;
@@ -42,6 +43,3 @@ export async function composeAccountMail(
   if (!isOpen) return { dropped: "Its link was used, replaced, or had run out before it could be sent." };
   return { letter: accountLetter(kind, { site, secret, name: person.name }), to };
 }
-
-/** What is kept of the secret of a link. */
-export const hashOfSecret = (secret: string): string => createHash("sha256").update(secret).digest("hex");

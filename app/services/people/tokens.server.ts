@@ -2,7 +2,7 @@ import { randomUUID } from "node:crypto";
 import type { EntityManager } from "@mikro-orm/postgresql";
 import { PersonToken } from "#app/db/entities/person-token.ts";
 import { TOKEN_LIFETIME, type TokenPurpose } from "#app/lib/account-mail.ts";
-import { hashOfSecret } from "../mail/compose-account-mail.server.ts";
+import { secretDigest } from "#app/server/secret-digest.server.ts";
 import { mailAccount } from "../mail/mail-account.server.ts";
 
 /**
@@ -34,7 +34,7 @@ export async function mailLink(
 export async function openToken(em: EntityManager, secret: string, purposes: readonly TokenPurpose[]) {
   const [row] = await em.execute<{ id: string }[]>(
     `select id from person_token where secret_hashes @> array[?]::text[] and ended_at is null and expires_at > ? for update`,
-    [hashOfSecret(secret), new Date()],
+    [secretDigest(secret), new Date()],
   );
   const token = row && (await em.findOne(PersonToken, { id: row.id }, { populate: ["person"] }));
   if (!token || !purposes.includes(token.purpose)) return null;

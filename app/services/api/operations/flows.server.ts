@@ -13,7 +13,19 @@ import { requireInSomeProgram } from "../../permission.server.ts";
 import { programFilter } from "../../program-filter.server.ts";
 import { operation } from "../operation.server.ts";
 import { keysetPage, pageOf, pageQuery } from "../paging.server.ts";
-import { id, idParam, moment, named, programQuery, programSlug, stated, statedIn, statedOrNull } from "../shapes.ts";
+import {
+  id,
+  idParam,
+  moment,
+  named,
+  programQuery,
+  programSlug,
+  siliconJson,
+  siliconUsed,
+  stated,
+  statedIn,
+  statedOrNull,
+} from "../shapes.ts";
 
 const step = z.object({
   number: z.int(),
@@ -41,7 +53,7 @@ const flow = z.object({
   name: z.string(),
   note: z.string(),
   program: programSlug,
-  silicon: z.object({ id, name: z.string(), diameter_m: z.number(), orientation: z.enum(["100", "111"]) }),
+  silicon: siliconUsed,
   incoming_thickness_m: statedIn("m"),
   steps: z.array(step),
   version: z.int(),
@@ -53,12 +65,7 @@ const flowJson = (detail: FlowDetail): z.input<typeof flow> => ({
   name: detail.name,
   note: detail.note,
   program: detail.program.slug,
-  silicon: {
-    id: detail.silicon.id,
-    name: detail.silicon.name,
-    diameter_m: detail.silicon.diameter,
-    orientation: detail.silicon.orientation,
-  },
+  silicon: siliconJson(detail.silicon),
   incoming_thickness_m: stated(detail.incomingThickness),
   steps: detail.steps.map((each, index) => ({
     number: index + 1,

@@ -11,7 +11,19 @@ import { findStacks, getStack, saveStack, type StackDetail } from "../../stacks.
 import { operation } from "../operation.server.ts";
 import { keysetPage, pageOf, pageQuery } from "../paging.server.ts";
 import { ApiRefused, refusedAt } from "../refused.server.ts";
-import { id, idParam, moment, named, programQuery, programSlug, stated, statedIn, statedOrNull } from "../shapes.ts";
+import {
+  id,
+  idParam,
+  moment,
+  named,
+  programQuery,
+  programSlug,
+  siliconJson,
+  siliconUsed,
+  stated,
+  statedIn,
+  statedOrNull,
+} from "../shapes.ts";
 
 const lines = z.object({ width_m: z.number(), direction_rad: z.number() });
 const film = z.object({
@@ -28,7 +40,7 @@ const stack = z.object({
   name: z.string(),
   note: z.string(),
   program: programSlug,
-  silicon: z.object({ id, name: z.string(), diameter_m: z.number(), orientation: z.enum(["100", "111"]) }),
+  silicon: siliconUsed,
   silicon_thickness_m: statedIn("m"),
   films: z.array(film).describe("Front first; of each side from the silicon outwards."),
   version: z.int(),
@@ -42,12 +54,7 @@ function stackJson(detail: StackDetail): z.input<typeof stack> {
     name: detail.name,
     note: detail.note,
     program: detail.program.slug,
-    silicon: {
-      id: detail.silicon.id,
-      name: detail.silicon.name,
-      diameter_m: detail.silicon.diameter,
-      orientation: detail.silicon.orientation,
-    },
+    silicon: siliconJson(detail.silicon),
     silicon_thickness_m: stated(detail.siliconThickness),
     films: detail.layers.map((layer) => ({
       side: layer.side,
