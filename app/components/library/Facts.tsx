@@ -1,4 +1,5 @@
 import type { ReactNode } from "react";
+import { noBreak } from "#app/components/drawings/no-break.ts";
 
 /** Something about a record that is no measured property. */
 export interface Fact {
@@ -16,7 +17,7 @@ export function Facts({ facts }: { facts: Fact[] }) {
           className="grid grid-cols-[9rem_minmax(0,1fr)] gap-x-3 border-t border-line py-2 first:border-0"
         >
           <dt className="text-quiet">{label}</dt>
-          <dd>{value}</dd>
+          <dd>{typeof value === "string" ? noBreak(value) : value}</dd>
         </div>
       ))}
     </dl>

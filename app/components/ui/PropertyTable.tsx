@@ -13,7 +13,7 @@ export interface Property {
   missing?: string;
 }
 
-/** A phone has no room for the column: its words stand under the property there. */
+/** A phone has no room for the columns: their words stand under property and value there. */
 const ON_WIDE = "max-tablet:hidden print:table-cell";
 
 const where = (measured: Measured | null | undefined) => [measured?.note, measured?.on].filter(Boolean).join(", ");
@@ -30,7 +30,9 @@ export function PropertyTable({ caption, properties }: { caption: string; proper
             <th scope="col" className="num">
               Value ± tolerance
             </th>
-            <th scope="col">Source</th>
+            <th scope="col" className={ON_WIDE}>
+              Source
+            </th>
             <th scope="col" className={ON_WIDE}>
               Where exactly
             </th>
@@ -47,13 +49,12 @@ export function PropertyTable({ caption, properties }: { caption: string; proper
               </th>
               <td className="num font-medium">
                 {measured ? formatMeasured(measured, dimension, { unit, sign }) : "–"}
+                <span className="block font-normal tablet:hidden print:hidden">
+                  <SourceOf measured={measured} missing={missing} />
+                </span>
               </td>
-              <td>
-                {measured ? (
-                  <SourceMark kind={measured.source} />
-                ) : (
-                  <span className="text-quiet">{missing ?? "not given"}</span>
-                )}
+              <td className={ON_WIDE}>
+                <SourceOf measured={measured} missing={missing} />
               </td>
               <td className={`text-quiet ${ON_WIDE}`}>{where(measured)}</td>
             </tr>
@@ -61,5 +62,13 @@ export function PropertyTable({ caption, properties }: { caption: string; proper
         </tbody>
       </table>
     </div>
+  );
+}
+
+function SourceOf({ measured, missing }: Pick<Property, "measured" | "missing">) {
+  return measured ? (
+    <SourceMark kind={measured.source} />
+  ) : (
+    <span className="text-quiet">{missing ?? "not given"}</span>
   );
 }

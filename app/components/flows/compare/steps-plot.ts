@@ -19,7 +19,7 @@ export function stepsPlot({ scale, places, lines, limits, rolled, tightest, cros
   });
   const signed: Plot = {
     ...plot,
-    x: { ...plot.x, title: "Step, as numbered in the table; edges up above 0, edges down below" },
+    x: { ...plot.x, title: "Step of the table; edges up above 0" },
     series: plot.series.map((series) => (series.dash === "none" ? series : { ...series, endLabel: series.id })),
     shaded: rolled.map(({ from, to, label }) => ({ from: from - 0.5, to: to + 0.5, label })),
     marks: [
@@ -54,7 +54,7 @@ function sizesOf(plot: Plot): Plot {
   );
   return {
     ...plot,
-    x: { ...plot.x, title: "Step, as numbered in the table; sizes alone, whichever way the edges lie" },
+    x: { ...plot.x, title: "Step of the table; sizes alone" },
     y: { scale: "log", ...axis, format: micrometres },
     series,
     marks: plot.marks?.map((mark) => ({ ...mark, ...size(mark) })),
