@@ -16,15 +16,27 @@ export function newPasswords() {
 }
 
 /**
- * The passwords of this copy's own database: made once, readable by this account alone.
+ * The secrets of this copy: each made once, readable by this account alone.
  *
- * @returns {DatabasePasswords}
+ * @returns {{ database: DatabasePasswords, sealing: string }}
  */
-export function keptPasswords() {
+function kept() {
   const file = join(ownFolder, "secrets.json");
-  if (existsSync(file)) return JSON.parse(readFileSync(file, "utf8")).database;
-  const passwords = newPasswords();
-  writeFileSync(`${file}.new`, `${JSON.stringify({ database: passwords }, null, 2)}\n`, { mode: 0o600 });
-  renameSync(`${file}.new`, file);
-  return passwords;
+  const known = existsSync(file) ? JSON.parse(readFileSync(file, "utf8")) : {};
+  const secrets = { database: newPasswords(), sealing: newSealingSecret(), ...known };
+  // One that was added since is made for a copy that has been there before.
+  if (Object.keys(secrets).some((name) => !(name in known))) {
+    writeFileSync(`${file}.new`, `${JSON.stringify(secrets, null, 2)}\n`, { mode: 0o600 });
+    renameSync(`${file}.new`, file);
+  }
+  return secrets;
 }
+
+/** The passwords of this copy's own database. */
+export const keptPasswords = () => kept().database;
+
+/** Under what this copy seals the secrets that it has to read again. */
+export const keptSealingSecret = () => kept().sealing;
+
+/** @returns {string} 32 bytes made at random */
+export const newSealingSecret = () => randomBytes(32).toString("base64url");

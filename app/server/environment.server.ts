@@ -1,5 +1,12 @@
 import { z } from "zod";
 import { mailSettings, requireWholeMail } from "./mail-settings.server.ts";
+import { networkList } from "./networks.server.ts";
+import { trustedProxies } from "./client-address.server.ts";
+
+const flag = z
+  .enum(["0", "1"])
+  .default("0")
+  .transform((text) => text === "1");
 
 const schema = z
   .object({
@@ -18,6 +25,14 @@ const schema = z
       ),
     /** of one token, or of one person without a token */
     API_REQUESTS_PER_MINUTE: z.coerce.number().int().min(1).max(100_000).default(120),
+    /** under which secrets are sealed that have to be read again, such as those of webhooks; the same in every process */
+    SEALING_SECRET: z.string().min(32, "takes 32 characters or more, made at random").optional(),
+    /** networks that webhooks may go to although they are not public */
+    WEBHOOK_NETWORKS: networkList,
+    /** whether webhooks may go without TLS */
+    WEBHOOK_HTTP: flag,
+    /** whose X-Forwarded-For is believed */
+    TRUSTED_PROXIES: trustedProxies,
     LOG_LEVEL: z.enum(["debug", "info", "warn", "error", "silent"]).default("info"),
   })
   .superRefine(requireWholeMail);

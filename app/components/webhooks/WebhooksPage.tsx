@@ -1,0 +1,59 @@
+import type { SubmissionResult } from "@conform-to/react";
+import { Link } from "react-router";
+import { PageHead } from "#app/components/layout/PageHead.tsx";
+import { EmptyState } from "#app/components/ui/EmptyState.tsx";
+import { Notice } from "#app/components/ui/Notice.tsx";
+import type { WebhooksView } from "#app/schemas/webhook.ts";
+import { MakeWebhook } from "./MakeWebhook.tsx";
+import { SecretShown } from "./SecretShown.tsx";
+import { WebhookList } from "./WebhookList.tsx";
+
+interface Props extends WebhooksView {
+  deleted: boolean;
+  /** the secret of the one that was just made */
+  secret: string | null;
+  lastResult: SubmissionResult<string[]> | undefined;
+  proofFault: string | undefined;
+}
+
+/** The webhooks of the reader and of the programs that they look after, and the form to make one. */
+export function WebhooksPage({ rows, programs, proofAsked, canSeal, deleted, secret, lastResult, proofFault }: Props) {
+  return (
+    <>
+      <PageHead title="Webhooks" />
+      {secret !== null && <SecretShown title="The webhook is made." secret={secret} />}
+      {deleted && secret === null && <Notice kind="done" title="The webhook and its log are deleted." />}
+      {!canSeal && (
+        <Notice kind="caution" title="This copy keeps no secrets, so no webhook can be made.">
+          Its operator sets SEALING_SECRET and starts Planeward anew.
+        </Notice>
+      )}
+      <p className="max-w-160 pb-4">
+        A webhook posts what happens in a program to an address of yours, signed. It names what it is about, such as a
+        sheet and its revision, and holds no figures: those are asked for by the <Link to="/api">API</Link>.{" "}
+        <Link to="/webhooks/receiving">How a receiver checks a delivery</Link>
+      </p>
+      <div className="grid items-start gap-6 wide:grid-cols-[minmax(0,1fr)_480px]">
+        {canSeal && (
+          <MakeWebhook
+            key={secret ?? rows.length}
+            programs={programs}
+            lastResult={lastResult}
+            proofAsked={proofAsked}
+            proofFault={proofFault}
+          />
+        )}
+        <div className="min-w-0 wide:-order-1">
+          {rows.length === 0 ? (
+            <EmptyState title="No webhook has been made">
+              Make one where another system of the site is to know at once that a sheet is released or a step is
+              stopped.
+            </EmptyState>
+          ) : (
+            <WebhookList rows={rows} />
+          )}
+        </div>
+      </div>
+    </>
+  );
+}
