@@ -2,6 +2,7 @@ import { Link } from "react-router";
 import { PageHead } from "#app/components/layout/PageHead.tsx";
 import { HungSection } from "#app/components/ui/HungSection.tsx";
 import { eventWords, WEBHOOK_EVENT_NAMES, type WebhookEventName } from "#app/schemas/webhook.ts";
+import { CHECK } from "./check-example.ts";
 
 /** The same for every event. */
 const HEAD = `{
@@ -16,19 +17,6 @@ const HEAD = `{
     "revision": "B",
     "flow": "Tern T-2, to 100 µm"
   }
-}`;
-
-const CHECK = `import { createHmac, timingSafeEqual } from "node:crypto";
-
-// body: the bytes as they came, before anything has parsed them
-export function isFromPlaneward(headers, body, secret) {
-  const timestamp = headers["planeward-timestamp"];
-  const age = Math.abs(Date.now() / 1000 - Number(timestamp));
-  if (!(age <= 300)) return false;
-  const expected = createHmac("sha256", secret).update(\`\${timestamp}.\`).update(body).digest();
-  const [, hex = ""] = /^v1=([0-9a-f]{64})$/.exec(headers["planeward-signature"]) ?? [];
-  const sent = Buffer.from(hex, "hex");
-  return sent.length === expected.length && timingSafeEqual(sent, expected);
 }`;
 
 const DATA: Record<WebhookEventName, string> = {

@@ -3,13 +3,15 @@ import { createHmac } from "node:crypto";
 /** Name of the way of signing, before the signature, so that another one can be told from it one day. */
 const WAY = "v1";
 
+/** HMAC-SHA-256 (RFC 2104) as hexadecimal digits. */
+export const hmacOf = (secret: string, text: string): string => createHmac("sha256", secret).update(text).digest("hex");
+
 /**
- * What a receiver checks: HMAC-SHA-256 (RFC 2104) under the webhook's secret over the time of sending, a point and the body, as hexadecimal
- * digits.
+ * What a receiver checks: an HMAC under the webhook's secret over the time of sending, a point and the body.
  * @param timestamp seconds since 1970
  */
-export const signatureOf = (secret: string, timestamp: number, body: string): string =>
-  `${WAY}=${createHmac("sha256", secret).update(`${timestamp}.${body}`).digest("hex")}`;
+const signatureOf = (secret: string, timestamp: number, body: string): string =>
+  `${WAY}=${hmacOf(secret, `${timestamp}.${body}`)}`;
 
 /** Headers of a delivery. @param id of the delivery @param sentAt ms since 1970 */
 export function deliveryHeaders(id: string, body: string, secret: string, sentAt: number): Record<string, string> {
