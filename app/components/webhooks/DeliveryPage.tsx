@@ -56,7 +56,11 @@ export function DeliveryPage({ delivery }: { delivery: DeliveryView }) {
       )}
       {ended && !mayReplay && (
         <p>
-          The webhook is off. <Link to={`/webhooks/${webhook.id}`}>Switch it on</Link> to send this again.
+          The webhook is off.{" "}
+          <Link to={`/webhooks/${webhook.id}`} className="link">
+            Switch it on
+          </Link>{" "}
+          to send this again.
         </p>
       )}
     </>

@@ -59,8 +59,12 @@ export function ReceivingPage({
           </p>
           <p>
             A delivery says that something has happened, and not how things stand now. Before anybody acts on it, ask
-            the <Link to="/api">API</Link> or open the sheet: it may be superseded by then. It takes the place of no run
-            card and of no procedure of the site.
+            the{" "}
+            <Link to="/api" className="link">
+              API
+            </Link>{" "}
+            or open the sheet: it may be superseded by then. It takes the place of no run card and of no procedure of
+            the site.
           </p>
         </div>
       </HungSection>

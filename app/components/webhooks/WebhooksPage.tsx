@@ -30,8 +30,14 @@ export function WebhooksPage({ rows, programs, proofAsked, canSeal, deleted, sec
       )}
       <p className="max-w-160 pb-4">
         A webhook posts what happens in a program to an address of yours, signed. It names what it is about, such as a
-        sheet and its revision, and holds no figures: those are asked for by the <Link to="/api">API</Link>.{" "}
-        <Link to="/webhooks/receiving">How a receiver checks a delivery</Link>
+        sheet and its revision, and holds no figures: those are asked for by the{" "}
+        <Link to="/api" className="link">
+          API
+        </Link>
+        .{" "}
+        <Link to="/webhooks/receiving" className="link">
+          How a receiver checks a delivery
+        </Link>
       </p>
       <div className="grid items-start gap-6 wide:grid-cols-[minmax(0,1fr)_480px]">
         {canSeal && (

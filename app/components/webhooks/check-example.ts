@@ -6,8 +6,10 @@ export function isFromPlaneward(headers, body, secret) {
   const timestamp = headers["planeward-timestamp"];
   const age = Math.abs(Date.now() / 1000 - Number(timestamp));
   if (!(age <= 300)) return false;
-  const expected = createHmac("sha256", secret).update(\`\${timestamp}.\`).update(body).digest();
-  const [, hex = ""] = /^v1=([0-9a-f]{64})$/.exec(headers["planeward-signature"]) ?? [];
+  const hmac = createHmac("sha256", secret);
+  const expected = hmac.update(\`\${timestamp}.\`).update(body).digest();
+  const signature = headers["planeward-signature"];
+  const [, hex = ""] = /^v1=([0-9a-f]{64})$/.exec(signature) ?? [];
   const sent = Buffer.from(hex, "hex");
   return sent.length === expected.length && timingSafeEqual(sent, expected);
 }`;
