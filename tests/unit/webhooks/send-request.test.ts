@@ -1,4 +1,4 @@
-import { lookup } from "node:dns";
+import type { lookup } from "node:dns";
 import { once } from "node:events";
 import { createServer, type IncomingMessage, type RequestListener, type Server } from "node:http";
 import type { AddressInfo } from "node:net";
