@@ -1,3 +1,4 @@
+import { randomUUID } from "node:crypto";
 import { request as newRequest, type APIRequestContext } from "@playwright/test";
 import type { RouteConfigEntry } from "@react-router/dev/routes";
 import routes from "#app/routes.ts";
@@ -265,3 +266,66 @@ for (const role of VISITORS)
       await context.dispose();
     });
   });
+
+/** What queries of our addresses are called, each with what might get into a statement, a pattern or a page. */
+const HOSTILE = Object.fromEntries(
+  [
+    ...["q", "sort", "page", "program", "state", "kind", "event", "outcome", "fits", "instrument", "list", "format"],
+    ...[
+      "actor",
+      "person",
+      "subject",
+      "action",
+      "from",
+      "to",
+      "of",
+      "by",
+      "leg",
+      "step",
+      "shape",
+      "at",
+      "lot",
+      "x",
+      "y",
+    ],
+  ].map((name) => [name, `${name}' or '1'='1'; select pg_sleep(20);--\u0000%_\\"><script>{{7*7}}`]),
+);
+
+test("nothing that an address is given makes the server fail, or opens what is shut", async ({ baseURL }) => {
+  test.setTimeout(180_000);
+  const query = new URLSearchParams(HOSTILE).toString();
+  for (const role of ["process owner", "administrator"] as const) {
+    const context = await visitor(role, baseURL);
+    const wrong: string[] = [];
+    const left = Object.keys(DOORS).filter(
+      (address) => role === "process owner" || DOORS[address]?.("technician") === 403,
+    );
+    const ask = async () => {
+      for (let address = left.shift(); address !== undefined; address = left.shift()) {
+        const path = filled(address, own).split("?")[0] ?? "";
+        const answer = await context.get(`${path}?${query}`, { maxRedirects: 0 });
+        const usual = DOORS[address]?.(role) ?? 0;
+        const opened = usual >= 400 && answer.status() < 300;
+        if (answer.status() >= 500 || opened) wrong.push(`${address} ${answer.status()}`);
+        else if ((await answer.text()).includes('"><script>{{7*7}}')) wrong.push(`${address} writes it as it came`);
+      }
+    };
+    await Promise.all(Array.from({ length: AT_ONCE }, ask));
+    expect(wrong, role).toEqual([]);
+    await context.dispose();
+  }
+});
+
+test("what is not there and what is of another program are told apart by nothing", async ({ baseURL }) => {
+  const context = await visitor("engineer", baseURL);
+  const nowhere = Object.fromEntries(
+    Object.entries(own).map(([name, id]) => [name, WALLED.includes(name) ? randomUUID() : id]),
+  );
+  const said = async (address: string, ids: DoorIds) => {
+    const text = await (await context.get(filled(address, ids), { maxRedirects: 0 })).text();
+    return (/There is no such [^<"\\]*/.exec(text) ?? [text])[0];
+  };
+  for (const address of Object.keys(DOORS).filter((known) => WALLED.some((name) => known.includes(`:${name}`))))
+    expect(await said(address, strange), address).toBe(await said(address, nowhere));
+  await context.dispose();
+});
