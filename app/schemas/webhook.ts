@@ -85,6 +85,8 @@ export interface WebhookRow {
   state: "on" | "off";
   /** why it is off; empty where somebody switched it off, or it is on */
   offReason: string;
+  /** whether whoever made it has left the program or the site, so that nothing is sent */
+  makerLeft: boolean;
   /** attempts in a row that have failed, and since when */
   failures: number;
   failingSince: string | null;

@@ -384,7 +384,10 @@ describe("by hand", () => {
     const old = { ...technician, session: { id: randomUUID(), provenAt: 0 } };
     await expect(make(old)).rejects.toEqual(status(403));
     await expect(renewSecret(old, id)).rejects.toEqual(status(403));
-    expect((await webhooksView(owner)).rows).toMatchObject([{ id, madeBy: technician.actor.name }]);
+    expect((await webhooksView(owner)).rows).toMatchObject([{ id, madeBy: technician.actor.name, makerLeft: false }]);
+    await asOwner(database, "update person set active = false where id = ?", [technician.actor.id]);
+    expect((await webhookPage(owner, id)).webhook.makerLeft).toBe(true);
+    await asOwner(database, "update person set active = true where id = ?", [technician.actor.id]);
     expect((await listDeliveries(owner, id, { ...params, query: "%" })).total).toBe(0);
     expect((await listDeliveries(owner, id, { ...params, query: "debond" })).total).toBe(1);
     expect((await listDeliveries(owner, id, { ...params, filters: { state: "sent" } })).total).toBe(0);

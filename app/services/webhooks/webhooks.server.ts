@@ -25,10 +25,11 @@ export async function webhooksView(scope: ActorScope): Promise<WebhooksView> {
       { populate: ["program"], orderBy: { name: "asc", id: "asc" } },
     );
     const names = await namesOf(em, found);
+    const left = await leftAlone(em, scope, found);
     return {
       rows: found
         .filter((webhook) => maySee(scope, webhook))
-        .map((webhook) => rowOf(webhook, webhook.program.name, names)),
+        .map((webhook) => rowOf(webhook, webhook.program.name, names, left)),
       programs: programs.map(({ programId, programName }) => ({ id: programId, name: programName })),
       proofAsked: !isProvenLately(scope),
       canSeal,
@@ -49,7 +50,19 @@ async function namesOf(em: EntityManager, webhooks: readonly Webhook[]): Promise
   return new Map(people.map(({ id, name }) => [id, name]));
 }
 
-function rowOf(webhook: Webhook, program: string, names: Map<string, string>): WebhookRow {
+/** Ids of those whose maker is not of their program any more, as far as the person may see who is: of programs that they work in. */
+async function leftAlone(em: EntityManager, { actor }: ActorScope, webhooks: readonly Webhook[]): Promise<Set<string>> {
+  const asked = webhooks.filter(({ program }) => mayInProgram(actor, "see the work", program.id));
+  if (asked.length === 0) return new Set();
+  const heard = await em.execute<{ id: string }[]>(
+    `select w.id from webhook w, jsonb_array_elements_text(w.events) event, webhook_listeners(w.program_id, event) l
+      where l.webhook_id = w.id`,
+  );
+  const hearing = new Set(heard.map(({ id }) => id));
+  return new Set(asked.filter(({ id, state }) => state === "on" && !hearing.has(id)).map(({ id }) => id));
+}
+
+function rowOf(webhook: Webhook, program: string, names: Map<string, string>, left: Set<string>): WebhookRow {
   const { id, name, address, events, state, offReason, failures } = webhook;
   return {
     id,
@@ -60,6 +73,7 @@ function rowOf(webhook: Webhook, program: string, names: Map<string, string>): W
     madeBy: names.get(webhook.createdBy.id) ?? "somebody of another program",
     state,
     offReason,
+    makerLeft: left.has(id),
     failures,
     failingSince: webhook.failingSince?.toISOString() ?? null,
     lastSentAt: webhook.lastSentAt?.toISOString() ?? null,
@@ -77,7 +91,8 @@ export async function findWebhook(em: EntityManager, scope: ActorScope, id: stri
 export async function webhookPage(scope: ActorScope, id: string | undefined) {
   return inScope(scope, async (em) => {
     const webhook = await findWebhook(em, scope, id);
-    const row = rowOf(webhook, webhook.program.name, await namesOf(em, [webhook]));
+    const left = await leftAlone(em, scope, [webhook]);
+    const row = rowOf(webhook, webhook.program.name, await namesOf(em, [webhook]), left);
     return {
       webhook: { ...row, secretMadeAt: webhook.secretMadeAt.toISOString() },
       proofAsked: !isProvenLately(scope),
