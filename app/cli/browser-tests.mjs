@@ -10,7 +10,7 @@ import { mailSettings } from "./mail-server.mjs";
 import { freePort, loopback } from "./ports.mjs";
 import { prepareDatabase } from "./prepare.mjs";
 import { packageProgram, root } from "./project.mjs";
-import { newSealingSecret } from "./secrets.mjs";
+import { newSecretKey } from "./secrets.mjs";
 import { Sentence } from "./sentence.mjs";
 import { serveBuild } from "./server.mjs";
 import { tallyPlaywright } from "./tally.mjs";
@@ -37,8 +37,8 @@ async function serveForTests({ keeper, env }, { folder, database, accountsFile }
     env: {
       ...env,
       DATABASE_URL: access.appUrl,
+      SECRET_KEY: newSecretKey(),
       SMTP_URL: undefined,
-      SEALING_SECRET: newSealingSecret(),
       // Receivers of the tests are on this machine; 127.0.0.2 is not among those that are named.
       WEBHOOK_NETWORKS: loopback,
       WEBHOOK_HTTP: "1",

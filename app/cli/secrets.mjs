@@ -15,28 +15,29 @@ export function newPasswords() {
   return { administrator: password(), owner: password(), app: password() };
 }
 
+/** @returns {string} 32 random bytes, from which the server derives the keys that it encrypts and signs with */
+export const newSecretKey = () => randomBytes(32).toString("base64url");
+
 /**
- * The secrets of this copy: each made once, readable by this account alone.
+ * A secret of this copy: made once, readable by this account alone.
  *
- * @returns {{ database: DatabasePasswords, sealing: string }}
+ * @template Secret
+ * @param {string} name
+ * @param {() => Secret} make
+ * @returns {Secret}
  */
-function kept() {
+function kept(name, make) {
   const file = join(ownFolder, "secrets.json");
   const known = existsSync(file) ? JSON.parse(readFileSync(file, "utf8")) : {};
-  const secrets = { database: newPasswords(), sealing: newSealingSecret(), ...known };
-  // One that was added since is made for a copy that has been there before.
-  if (Object.keys(secrets).some((name) => !(name in known))) {
-    writeFileSync(`${file}.new`, `${JSON.stringify(secrets, null, 2)}\n`, { mode: 0o600 });
-    renameSync(`${file}.new`, file);
-  }
-  return secrets;
+  if (known[name] !== undefined) return known[name];
+  const made = make();
+  writeFileSync(`${file}.new`, `${JSON.stringify({ ...known, [name]: made }, null, 2)}\n`, { mode: 0o600 });
+  renameSync(`${file}.new`, file);
+  return made;
 }
 
-/** The passwords of this copy's own database. */
-export const keptPasswords = () => kept().database;
+/** @returns {DatabasePasswords} of this copy's own database */
+export const keptPasswords = () => kept("database", newPasswords);
 
-/** Under what this copy seals the secrets that it has to read again. */
-export const keptSealingSecret = () => kept().sealing;
-
-/** @returns {string} 32 bytes made at random */
-export const newSealingSecret = () => randomBytes(32).toString("base64url");
+/** @returns {string} this copy's key, where the environment names none */
+export const keptSecretKey = () => kept("key", newSecretKey);

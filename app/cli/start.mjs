@@ -20,7 +20,7 @@ import { mailSettings } from "./mail-server.mjs";
 import { loopback, requireFreePort, wantedPort } from "./ports.mjs";
 import { prepareDatabase } from "./prepare.mjs";
 import { makeOwnFolder, ownFolder } from "./project.mjs";
-import { keptSealingSecret } from "./secrets.mjs";
+import { keptSecretKey } from "./secrets.mjs";
 import { stopRecorded } from "./run-record.mjs";
 import { Sentence, printFailure } from "./sentence.mjs";
 import { serveBuild, serveSources } from "./server.mjs";
@@ -78,8 +78,7 @@ async function run(keeper, { port, external }) {
       ...process.env,
       DATABASE_URL: database.appUrl,
       DATABASE_OWNER_URL: undefined,
-      // What was sealed is in the database: a secret of this folder would be no use to another copy that shares it.
-      SEALING_SECRET: process.env.SEALING_SECRET ?? (external ? undefined : keptSealingSecret()),
+      SECRET_KEY: process.env.SECRET_KEY || keptSecretKey(),
     },
     address,
     folder: join(ownFolder, "mail"),

@@ -59,7 +59,7 @@ function testEnvironment(temporaryFiles) {
     "HOST",
     "NODE_ENV",
     "PORT",
-    "SEALING_SECRET",
+    "SECRET_KEY",
     "TRUSTED_PROXIES",
     "WEBHOOK_HTTP",
     "WEBHOOK_NETWORKS",

@@ -97,8 +97,6 @@ export interface WebhooksView {
   rows: WebhookRow[];
   programs: { id: string; name: string }[];
   proofAsked: boolean;
-  /** whether the environment allows that secrets are kept at all */
-  canSeal: boolean;
 }
 
 export interface DeliveryRow {

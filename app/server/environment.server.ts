@@ -13,6 +13,8 @@ const schema = z
     ...mailSettings,
     NODE_ENV: z.enum(["production", "development", "test"]).default("production"),
     DATABASE_URL: z.url({ protocol: /^postgres(ql)?$/ }),
+    /** what the keys that the server encrypts and signs with are derived from; made by `npm start` where it is not set */
+    SECRET_KEY: z.string().regex(/^[\w-]{43,200}$/, "write 43 or more letters, digits, - and _, made at random"),
     /** comma-separated origins that may post forms besides the server's own, for a proxy in front */
     ALLOWED_ORIGINS: z
       .string()
@@ -25,8 +27,6 @@ const schema = z
       ),
     /** of one token, or of one person without a token */
     API_REQUESTS_PER_MINUTE: z.coerce.number().int().min(1).max(100_000).default(120),
-    /** under which secrets are sealed that have to be read again, such as those of webhooks; the same in every process */
-    SEALING_SECRET: z.string().min(32, "takes 32 characters or more, made at random").optional(),
     /** networks that webhooks may go to although they are not public */
     WEBHOOK_NETWORKS: networkList,
     /** whether webhooks may go without TLS */

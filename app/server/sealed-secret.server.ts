@@ -7,14 +7,9 @@ const NONCE = 12;
 /** Of the whole form, so that another one can be told from it. */
 const FORM = "s1";
 
-/** Whether the environment names the secret that others are sealed under. */
-export const canSeal = environment.SEALING_SECRET !== undefined;
-
 /** A key for one purpose (RFC 5869): what is sealed for one is nothing to another. */
 function keyFor(purpose: string): Buffer {
-  const secret = environment.SEALING_SECRET;
-  if (secret === undefined) throw new Error("SEALING_SECRET is not set, so nothing can be sealed or read.");
-  return Buffer.from(hkdfSync("sha256", secret, "", `planeward ${purpose}`, 32));
+  return Buffer.from(hkdfSync("sha256", environment.SECRET_KEY, "planeward", purpose, 32));
 }
 
 /**

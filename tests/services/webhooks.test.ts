@@ -8,7 +8,6 @@ import type { ActorScope } from "#app/server/scope.server.ts";
 import { scopeOfPerson } from "#tests/db/people.ts";
 import { asOwner, useDatabase } from "#tests/db/test-database.ts";
 
-process.env["SEALING_SECRET"] = "of-tests-and-nowhere-else-0123456789";
 process.env["WEBHOOK_NETWORKS"] = "127.0.0.1";
 process.env["WEBHOOK_HTTP"] = "1";
 

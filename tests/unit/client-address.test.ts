@@ -80,6 +80,7 @@ afterEach(() => {
 test("the header that loaders read holds the client behind a trusted proxy, whatever was sent under its name", async () => {
   vi.resetModules();
   vi.stubEnv("DATABASE_URL", "postgresql://nobody@127.0.0.1:1/none");
+  vi.stubEnv("SECRET_KEY", "k".repeat(43));
   vi.stubEnv("TRUSTED_PROXIES", "127.0.0.1");
   const { PEER_HEADER, watchConnections } = await import("#app/server/connection.server.ts");
   watchConnections();

@@ -17,17 +17,12 @@ interface Props extends WebhooksView {
 }
 
 /** The webhooks of the reader and of the programs that they look after, and the form to make one. */
-export function WebhooksPage({ rows, programs, proofAsked, canSeal, deleted, secret, lastResult, proofFault }: Props) {
+export function WebhooksPage({ rows, programs, proofAsked, deleted, secret, lastResult, proofFault }: Props) {
   return (
     <>
       <PageHead title="Webhooks" />
       {secret !== null && <SecretShown title="The webhook is made." secret={secret} />}
       {deleted && secret === null && <Notice kind="done" title="The webhook and its log are deleted." />}
-      {!canSeal && (
-        <Notice kind="caution" title="This copy keeps no secrets, so no webhook can be made.">
-          Its operator sets SEALING_SECRET and starts Planeward anew.
-        </Notice>
-      )}
       <p className="max-w-160 pb-4">
         A webhook posts what happens in a program to an address of yours, signed. It names what it is about, such as a
         sheet and its revision, and holds no figures: those are asked for by the{" "}
@@ -40,15 +35,13 @@ export function WebhooksPage({ rows, programs, proofAsked, canSeal, deleted, sec
         </Link>
       </p>
       <div className="grid items-start gap-6 wide:grid-cols-[minmax(0,1fr)_480px]">
-        {canSeal && (
-          <MakeWebhook
-            key={secret ?? rows.length}
-            programs={programs}
-            lastResult={lastResult}
-            proofAsked={proofAsked}
-            proofFault={proofFault}
-          />
-        )}
+        <MakeWebhook
+          key={secret ?? rows.length}
+          programs={programs}
+          lastResult={lastResult}
+          proofAsked={proofAsked}
+          proofFault={proofFault}
+        />
         <div className="min-w-0 wide:-order-1">
           {rows.length === 0 ? (
             <EmptyState title="No webhook has been made">

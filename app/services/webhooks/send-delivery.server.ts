@@ -63,7 +63,7 @@ async function takeUp(work: Scope, id: string) {
     else if (!mayHear)
       await park(em, id, "Whoever made the webhook may not see in the program what it tells any more.");
     else if (secret === null)
-      await park(em, id, "Its secret cannot be read: SEALING_SECRET is not what it was. Renew the secret.");
+      await park(em, id, "Its secret cannot be read: SECRET_KEY is not what it was. Renew the secret.");
     else {
       const attemptId = randomUUID();
       await em.nativeUpdate(

@@ -3,9 +3,8 @@ import type { EntityManager } from "@mikro-orm/postgresql";
 import { Webhook } from "#app/db/entities/webhook.ts";
 import { mayInProgram, programsWhere } from "#app/policies/permissions.ts";
 import type { NewWebhook, WebhookRow, WebhooksView } from "#app/schemas/webhook.ts";
-import { notFound, problem } from "#app/server/problem.server.ts";
+import { notFound } from "#app/server/problem.server.ts";
 import { inScope, type ActorScope } from "#app/server/scope.server.ts";
-import { canSeal } from "#app/server/sealed-secret.server.ts";
 import { isProvenLately, requireRecentProof } from "../people/recent-proof.server.ts";
 import { requireInProgram, requireInSomeProgram } from "../permission.server.ts";
 import { idFrom } from "../uuid.server.ts";
@@ -32,7 +31,6 @@ export async function webhooksView(scope: ActorScope): Promise<WebhooksView> {
         .map((webhook) => rowOf(webhook, webhook.program.name, names, left)),
       programs: programs.map(({ programId, programName }) => ({ id: programId, name: programName })),
       proofAsked: !isProvenLately(scope),
-      canSeal,
     };
   });
 }
@@ -107,7 +105,6 @@ export async function makeWebhook(
 ): Promise<{ id: string; secret: string } | { refused: string }> {
   requireInProgram(scope, "keep webhooks", program, "program");
   requireRecentProof(scope);
-  if (!canSeal) throw problem(409, "This copy keeps no secrets: its operator has to set SEALING_SECRET first.");
   return inScope(scope, async (em) => {
     await em.execute("select pg_advisory_xact_lock(hashtextextended(?, 0))", [`webhooks of ${scope.actor.id}`]);
     if ((await em.count(Webhook, { program, createdBy: scope.actor.id })) >= MOST)
