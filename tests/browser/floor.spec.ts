@@ -270,6 +270,8 @@ test.describe("through a lost connection", () => {
 
     await context.setOffline(false);
     await expect(page.getByText("3 entries that waited have been sent.")).toBeVisible({ timeout: 30_000 });
+    // The page knows by itself how things stand now.
+    await expect(page.getByText("Current at")).toBeVisible();
     const refused = page.getByRole("alert").filter({ hasText: "Not taken: Step 2 started" });
     await expect(refused).toContainText("is stopped for every lot: tool trouble");
     await refused.getByRole("button", { name: "Keep it as an observation" }).click();

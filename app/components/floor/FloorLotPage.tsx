@@ -24,7 +24,7 @@ interface Props {
 /** A lot on the floor: what blocks it, its sheet to be acknowledged, where it is, and its steps. */
 export function FloorLotPage(props: Props) {
   return (
-    <FloorOnDevice lot={props.lot} step={null}>
+    <FloorOnDevice lot={props.lot} step={null} isForm={false}>
       {(lot, notices) => <LotScreen {...props} lot={lot} notices={notices} />}
     </FloorOnDevice>
   );

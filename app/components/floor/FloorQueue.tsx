@@ -2,17 +2,16 @@ import { minuteOf } from "#app/lib/minute-of.ts";
 import type { FloorOutbox } from "./use-floor-outbox.ts";
 
 /** What was entered and the server does not have: what waits, what it did not take, and what went out since. */
-export function FloorQueue({ outbox: { queued, sent, drop, observe }, here }: { outbox: FloorOutbox; here: string }) {
+export function FloorQueue({ outbox: { queued, sent, drop, observe } }: { outbox: FloorOutbox }) {
   const waiting = queued.filter(({ refused }) => refused === null);
   const refused = queued.filter((entry) => entry.refused !== null);
   return (
     <>
-      {sent > 0 && (
+      {sent.length > 0 && (
         <p role="status" className="mb-4 border-l-4 border-clear bg-raised p-3 text-lead">
-          {sent === 1 ? "1 entry that waited has been sent. " : `${sent} entries that waited have been sent. `}
-          <a href={here} className="link">
-            Show the lot as it is now
-          </a>
+          {sent.length === 1
+            ? "1 entry that waited has been sent."
+            : `${sent.length} entries that waited have been sent.`}
         </p>
       )}
       {waiting.length > 0 && (

@@ -27,7 +27,7 @@ export interface FloorStepProps {
 /** One step of a lot: what hands do, what must not happen, and the few things that can be said of it. */
 export function FloorStepPage(props: FloorStepProps & Answered) {
   return (
-    <FloorOnDevice lot={props.lot} step={props.step.number}>
+    <FloorOnDevice lot={props.lot} step={props.step.number} isForm={props.deed !== null}>
       {(lot, notices) => <StepScreen {...props} lot={lot} sheet={lot.sheet ?? props.sheet} notices={notices} />}
     </FloorOnDevice>
   );

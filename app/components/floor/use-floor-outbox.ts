@@ -5,8 +5,8 @@ import { dropQueued, putQueued, queuedOf, type QueuedEntry } from "#app/lib/floo
 export interface FloorOutbox {
   /** what this person entered of this lot and the server does not have */
   queued: QueuedEntry[];
-  /** how many entries went out by themselves since the page came */
-  sent: number;
+  /** entries of this lot that went out by themselves since the page came */
+  sent: QueuedEntry[];
   /** keeps an entry until the server has it; what it was refused for is the caller's to show */
   enter: (entry: QueuedEntry) => Promise<"stored" | "waits" | "refused">;
   drop: (id: string) => Promise<void>;
@@ -20,7 +20,7 @@ const AGAIN = 15_000;
 /** The entries of a person for one lot on their way to the server, through lost connections and closed pages. */
 export function useFloorOutbox(person: string, lot: string): FloorOutbox {
   const [queued, setQueued] = useState<QueuedEntry[]>([]);
-  const [sent, setSent] = useState(0);
+  const [sent, setSent] = useState<QueuedEntry[]>([]);
   // On its way by its own form, which leads on by itself: it does not wait.
   const sending = useRef(new Set<string>());
   const look = useCallback(async () => {
@@ -41,7 +41,7 @@ export function useFloorOutbox(person: string, lot: string): FloorOutbox {
         if (delivered.outcome === "refused") await putQueued({ ...entry, refused: delivered.sentence });
         else {
           await dropQueued(entry.id);
-          if (entry.lot === lot) setSent((count) => count + 1);
+          if (entry.lot === lot) setSent((before) => [...before, entry]);
         }
       }
     } finally {
