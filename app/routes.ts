@@ -156,6 +156,12 @@ export default [
     route("settings", "routes/_app/settings.tsx"),
     route("api", "routes/_app/api.tsx"),
     route("tokens", "routes/_app/tokens.tsx"),
+    ...prefix("webhooks", [
+      index("routes/_app/webhooks/list.tsx"),
+      route("receiving", "routes/_app/webhooks/receiving.tsx"),
+      route(":webhookId", "routes/_app/webhooks/webhook.tsx"),
+      route(":webhookId/deliveries/:deliveryId", "routes/_app/webhooks/delivery.tsx"),
+    ]),
     ...prefix("audit", [
       index("routes/_app/audit/list.tsx"),
       route("trail.csv", "routes/_app/audit/csv.ts"),

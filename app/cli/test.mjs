@@ -52,7 +52,18 @@ function makeTemporaryFolder() {
  */
 function testEnvironment(temporaryFiles) {
   mkdirSync(temporaryFiles);
-  const others = ["DATABASE_URL", "DATABASE_OWNER_URL", "DEMO_ACCOUNTS_FILE", "HOST", "NODE_ENV", "PORT"];
+  const others = [
+    "DATABASE_URL",
+    "DATABASE_OWNER_URL",
+    "DEMO_ACCOUNTS_FILE",
+    "HOST",
+    "NODE_ENV",
+    "PORT",
+    "SECRET_KEY",
+    "TRUSTED_PROXIES",
+    "WEBHOOK_HTTP",
+    "WEBHOOK_NETWORKS",
+  ];
   const kept = Object.entries(process.env).filter(([name]) => !others.includes(name));
   return { ...Object.fromEntries(kept), TMPDIR: temporaryFiles };
 }

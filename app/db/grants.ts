@@ -79,6 +79,8 @@ const READ_AND_WRITE = [
   "mail_choice",
   "person_token",
   "rate_limit",
+  "webhook",
+  "webhook_delivery",
 ];
 
 /** SQL that gives the role its rights and nothing more. */

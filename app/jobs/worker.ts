@@ -12,9 +12,13 @@ import { freeLostJobs } from "#app/services/jobs/lost-jobs.server.ts";
 import { runJob } from "#app/services/jobs/run-job.server.ts";
 import { queueLostMail } from "#app/services/mail/lost-mail.server.ts";
 import { makeDigests } from "#app/services/mail/make-digests.server.ts";
+import { postWebhook } from "#app/integrations/webhook/configured.server.ts";
 import { MAIL_TASK } from "#app/services/mail/queue-mail.server.ts";
 import { sendMail } from "#app/services/mail/send-mail.server.ts";
 import { forgetOldPrints } from "#app/services/sheets/print-retention.server.ts";
+import { forgetOldDeliveries, queueLostDeliveries } from "#app/services/webhooks/lost-deliveries.server.ts";
+import { DELIVERY_TASK } from "#app/services/webhooks/queue-delivery.server.ts";
+import { sendDelivery } from "#app/services/webhooks/send-delivery.server.ts";
 
 /** How often the jobs of workers that were killed are looked for, milliseconds. */
 const LOOK_AGAIN = 10_000;
@@ -71,6 +75,7 @@ const mail = await worker({
     },
     { task: "out of date", match: "*/5 * * * *" },
     { task: "old prints", match: "30 3 * * *" },
+    { task: "old deliveries", match: "40 3 * * *" },
     { task: "seals", match: "* * * * *" },
   ]),
   taskList: {
@@ -79,14 +84,23 @@ const mail = await worker({
     "out of date": () => announceOutOfDate(),
     seals: async () => void (await sealAudit()),
     "old prints": async () => void (await forgetOldPrints()),
+    "old deliveries": async () => void (await forgetOldDeliveries()),
   },
 });
+/** Beside mail, so that receivers that do not answer keep no mail waiting. */
+const webhooks = await worker({
+  concurrency: 4,
+  parsedCronItems: [],
+  taskList: { [DELIVERY_TASK]: (payload) => sendDelivery(payload, postWebhook) },
+});
+const runners = [jobs, mail, webhooks];
 if (!transport) log.warn("no mail server is named by SMTP_URL, so mail waits in the outbox");
 
 const look = async () => {
   try {
     await freeLostJobs();
     if (transport) await queueLostMail();
+    await queueLostDeliveries();
   } catch (error) {
     log.error({ error: String(error) }, "lost jobs could not be looked for");
   }
@@ -98,12 +112,13 @@ for (const signal of ["SIGTERM", "SIGINT"] as const)
   process.once(signal, () => {
     log.info({ signal }, "the worker is stopping");
     // One that is stopping already is on its way.
-    for (const runner of [jobs, mail]) runner.stop().catch(() => undefined);
+    for (const runner of runners) runner.stop().catch(() => undefined);
   });
 
 try {
-  await Promise.race([jobs.promise, mail.promise]);
-  await Promise.all([jobs.promise, mail.promise]);
+  const ends = runners.map(({ promise }) => promise);
+  await Promise.race(ends);
+  await Promise.all(ends);
 } catch (error) {
   log.error({ error: String(error) }, "the worker has ended by itself");
   process.exitCode = 1;

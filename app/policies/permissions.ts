@@ -9,6 +9,8 @@ export const PROGRAM_PERMISSIONS = {
   "edit stacks and flows": ["engineer", "process owner"],
   "run assessments": ["engineer", "process owner"],
   "see the outbox": ["process owner", "administrator"],
+  "keep webhooks": ["guest", "technician", "engineer", "process owner", "shift lead", "administrator"],
+  "look after webhooks": ["process owner", "administrator"],
   "name a delegate": ["process owner"],
   "ask for a review": ["engineer", "process owner"],
   "comment in a review": ["technician", "engineer", "process owner", "shift lead"],

@@ -40,6 +40,12 @@ const WITHIN: (Page & { open: (actor: Actor) => boolean })[] = [
     also: "access for scripts and instruments, keys",
     open: (actor) => mayOnSite(actor, "see the audit trail") || programsWhere(actor, "see released sheets").length > 0,
   },
+  {
+    name: "Webhooks",
+    path: "/webhooks",
+    also: "events, notifications, integration, receivers",
+    open: (actor) => programsWhere(actor, "keep webhooks").length > 0,
+  },
   { name: "API", path: "/api", also: "reference, OpenAPI, scripts, integration", open: () => true },
   {
     name: "Audit trail",

@@ -52,6 +52,14 @@ export const announcementSchema = z.discriminatedUnion("kind", [
     what: note,
   }),
   z.object({ kind: z.literal("step stopped"), ...about, flow: name, step: name, reason: note }),
+  z.object({
+    kind: z.literal("webhook switched off"),
+    program: name,
+    webhook: name,
+    /** attempts in a row that have failed */
+    failures: z.int().positive(),
+    path,
+  }),
   z.object({ kind: z.literal("lot held"), ...about, lot: name, reason: note }),
 ]);
 

@@ -69,6 +69,8 @@ const SUBJECTS: Record<string, string> = {
   Delegation: "delegation",
   Incident: "incident",
   ApiToken: "API token",
+  Webhook: "webhook",
+  WebhookDelivery: "delivery of a webhook",
   IncidentNote: "note of an incident",
   IncidentPhoto: "photo of an incident",
 };
@@ -91,6 +93,11 @@ const LEFT_OUT = new Set([
   "input",
   "result",
   "lots",
+  "sealedSecret",
+  "body",
+  "failures",
+  "failingSince",
+  "lastSentAt",
 ]);
 
 type Plain = Record<string, unknown>;

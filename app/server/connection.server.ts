@@ -1,8 +1,10 @@
 import { subscribe } from "node:diagnostics_channel";
 import type { IncomingMessage, ServerResponse } from "node:http";
+import { clientAddress } from "./client-address.server.ts";
+import { environment } from "./environment.server.ts";
 import { siteIsOverTls } from "./over-tls.server.ts";
 
-/** Header that carries the peer's address to loaders; whatever a client sent under this name is overwritten. */
+/** Header that carries the address of whoever asks to loaders; whatever a client sent under this name is overwritten. */
 export const PEER_HEADER = "x-planeward-peer";
 
 /** A year, and whatever is below this host. */
@@ -12,7 +14,8 @@ const kept = globalThis as { planewardWatchesConnections?: boolean };
 
 /**
  * The production server answers static files before any middleware runs and hands no peer address on. Node announces every
- * request before it is handled, which is early enough for both: the address goes into a header of ours, and every answer, files
+ * request before it is handled, which is early enough for both: the address goes into a header of ours (of the proxies that are
+ * trusted, that of whom they were asked by), and every answer, files
  * included, is marked as not to be sniffed and, where the site is reached over TLS, as never to be asked for without.
  */
 export function watchConnections(): void {
@@ -20,7 +23,12 @@ export function watchConnections(): void {
   kept.planewardWatchesConnections = true;
   subscribe("http.server.request.start", (message) => {
     const { request, response } = message as { request: IncomingMessage; response: ServerResponse };
-    request.headers[PEER_HEADER] = request.socket.remoteAddress ?? "";
+    const forwarded = request.headers["x-forwarded-for"];
+    request.headers[PEER_HEADER] = clientAddress(
+      request.socket.remoteAddress ?? "",
+      Array.isArray(forwarded) ? forwarded.join(",") : forwarded,
+      environment.TRUSTED_PROXIES,
+    );
     if (response.headersSent) return;
     response.setHeader("X-Content-Type-Options", "nosniff");
     if (siteIsOverTls) response.setHeader("Strict-Transport-Security", STRICT_TRANSPORT);

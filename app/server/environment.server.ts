@@ -1,11 +1,20 @@
 import { z } from "zod";
 import { mailSettings, requireWholeMail } from "./mail-settings.server.ts";
+import { networkList } from "./networks.server.ts";
+import { trustedProxies } from "./client-address.server.ts";
+
+const flag = z
+  .enum(["0", "1"])
+  .default("0")
+  .transform((text) => text === "1");
 
 const schema = z
   .object({
     ...mailSettings,
     NODE_ENV: z.enum(["production", "development", "test"]).default("production"),
     DATABASE_URL: z.url({ protocol: /^postgres(ql)?$/ }),
+    /** what the keys that the server encrypts and signs with are derived from; made by `npm start` where it is not set */
+    SECRET_KEY: z.string().regex(/^[\w-]{43,200}$/, "write 43 or more letters, digits, - and _, made at random"),
     /** comma-separated origins that may post forms besides the server's own, for a proxy in front */
     ALLOWED_ORIGINS: z
       .string()
@@ -18,6 +27,12 @@ const schema = z
       ),
     /** of one token, or of one person without a token */
     API_REQUESTS_PER_MINUTE: z.coerce.number().int().min(1).max(100_000).default(120),
+    /** networks that webhooks may go to although they are not public */
+    WEBHOOK_NETWORKS: networkList,
+    /** whether webhooks may go without TLS */
+    WEBHOOK_HTTP: flag,
+    /** whose X-Forwarded-For is believed */
+    TRUSTED_PROXIES: trustedProxies,
     LOG_LEVEL: z.enum(["debug", "info", "warn", "error", "silent"]).default("info"),
   })
   .superRefine(requireWholeMail);

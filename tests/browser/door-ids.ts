@@ -27,6 +27,8 @@ export const WALLED: readonly string[] = [
   "incidentId",
   "photoId",
   "handOverId",
+  "webhookId",
+  "deliveryId",
 ];
 
 type Query = <Row>(sql: string, params?: unknown[]) => Promise<Row[]>;
@@ -141,10 +143,12 @@ export async function ternIds(engineer: APIRequestContext): Promise<DoorIds> {
     ),
   );
   const incident = await reportedIncident(engineer, assessmentId);
+  const webhook = await webhookOf(known.program);
   return {
     ...known,
     ...placed,
     ...incident,
+    ...webhook,
     revisionId,
     token: "of-no-sheet-whatsoever",
     assessmentId,
@@ -200,6 +204,29 @@ async function reportedIncident(engineer: APIRequestContext, assessment: string)
   });
 }
 
+/** A webhook of somebody of another account than all visitors, with a delivery that ended. */
+function webhookOf(program: string) {
+  return asOwner(async (query) => {
+    const webhookId = await idOf(
+      query,
+      `insert into webhook (id, program_id, name, address, events, sealed_secret, secret_made_at, state, off_reason, failures, created_at,
+                            created_by_id)
+         select gen_random_uuid(), ?, 'At the door', 'https://receiver.example/', '[]', '', now(), 'off', '', 0, now(), p.id
+           from person p where p.email = 'second-process-owner@kestrel-ridge.example' returning id`,
+      [program],
+    );
+    const deliveryId = await idOf(
+      query,
+      `insert into webhook_delivery (id, program_id, webhook_id, event, key, event_id, about, body, state, attempts, tries, next_try_at,
+                                     reason, created_at, by_hand)
+         values (gen_random_uuid(), ?, ?, 'test', 'door', gen_random_uuid(), '', '{}', 'parked', 0, '[]', now(), '', now(), false)
+         returning id`,
+      [program, webhookId],
+    );
+    return { webhookId, deliveryId };
+  });
+}
+
 /** Copies of the same rows in a program of their own, to which nobody belongs. */
 export function strangeIds(own: DoorIds): Promise<DoorIds> {
   return asOwner(async (query) => {
@@ -240,8 +267,11 @@ export function strangeIds(own: DoorIds): Promise<DoorIds> {
       lot_id: lotId,
       wafer_id: null,
     });
+    const webhookId = await copy("webhook", own["webhookId"]);
     return {
       ...own,
+      webhookId,
+      deliveryId: await copy("webhook_delivery", own["deliveryId"], { webhook_id: webhookId }),
       flowId,
       fileId,
       incidentId,

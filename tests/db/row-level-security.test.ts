@@ -40,6 +40,8 @@ const PROGRAM_TABLES = [
   "hand_over",
   "api_token",
   "mail_outbox",
+  "webhook",
+  "webhook_delivery",
 ];
 const SITE_TABLES = [
   "film",

@@ -24,6 +24,8 @@ const PROGRAM_TABLE: Record<keyof typeof PROGRAM_PERMISSIONS, string> = {
   "edit stacks and flows": "- - - y y -",
   "run assessments": "    - - - y y -",
   "see the outbox": "     - - - - y y",
+  "keep webhooks": "      y y y y y y",
+  "look after webhooks": "- - - - y y",
   "name a delegate": "    - - - - y -",
   "ask for a review": "   - - - y y -",
   "comment in a review": "- y y y y -",

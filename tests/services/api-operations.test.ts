@@ -5,6 +5,7 @@ import type { Operation } from "#app/services/api/operation.server.ts";
 import { scopeOfPerson } from "#tests/db/people.ts";
 import { asOwner, useDatabase } from "#tests/db/test-database.ts";
 import { answerChecker, ask, tokenOf, type Sent } from "./api-client.ts";
+import { OPERATION_RULES } from "./api-rules.ts";
 import { newLot, releaseFirstFlow } from "./lot-on-sheet.ts";
 
 process.env["API_REQUESTS_PER_MINUTE"] = "90000";
@@ -181,6 +182,32 @@ describe("every operation", () => {
     }
     expect(wrong).toEqual([]);
   });
+});
+
+describe("every operation has its rule", () => {
+  test("by its name", () => {
+    expect(Object.keys(OPERATION_RULES).toSorted()).toEqual(operations.map(({ id }) => id).toSorted());
+  });
+
+  test.each(["guest", "technician", "engineer", "process-owner", "shift-lead", "administrator"])(
+    "which answers a token of a %s as the permissions say",
+    LONG,
+    async (account) => {
+      const token = await tokenOf(database, account, "tern");
+      const { bearerOf } = await import("#app/services/api/token-actor.server.ts");
+      const bearer = await bearerOf(token, "test");
+      if (!bearer) throw new Error("the token is not good");
+      const answered: Record<string, number> = {};
+      const expected: Record<string, number> = {};
+      for (const operation of operations) {
+        if (operation.id === "changeStack")
+          ids["etag"] = (await ask("GET", placed(operation), { token: good })).headers.get("ETag") ?? "";
+        answered[operation.id] = (await send(operation, token)).status;
+        expected[operation.id] = OPERATION_RULES[operation.id]?.(bearer.actor, bearer.programId) ?? 0;
+      }
+      expect(answered).toEqual(expected);
+    },
+  );
 });
 
 test("what was sent comes back as it was sent", LONG, async () => {

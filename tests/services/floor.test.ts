@@ -5,6 +5,7 @@ import { refusedSentence } from "#app/server/problem.server.ts";
 import type { ActorScope } from "#app/server/scope.server.ts";
 import { scopeOfPerson } from "#tests/db/people.ts";
 import { asOwner, useDatabase } from "#tests/db/test-database.ts";
+import { heardOf, listen } from "./listening.ts";
 import { newLot, releaseFirstFlow } from "./lot-on-sheet.ts";
 
 const database = useDatabase({ demo: true });
@@ -215,7 +216,17 @@ describe("a hold and a stop", () => {
       reason: "Twice the bow",
     };
     await expect(stopStep(guest, lot, form)).rejects.toEqual(status(404));
+    await listen(database, "engineer", "tern");
+    await listen(database, "engineer", "petrel");
+    await listen(database, "guest", "tern");
     await stopStep(technician, lot, form);
+    expect(await heardOf(database, form.id)).toMatchObject([
+      {
+        event: "step.stopped",
+        program: { slug: "tern" },
+        data: { stop_id: form.id, lot_id: lot, lot: "T-0420", step: 2 },
+      },
+    ]);
     expect(await toldOf(form.id)).toEqual(expect.arrayContaining([owner.actor.name, engineer.actor.name]));
     expect(await say(technician, entry({ kind: "started" }, 2))).toContain("is stopped for every lot");
     const elsewhere = await look(lead, other);

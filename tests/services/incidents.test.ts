@@ -6,6 +6,7 @@ import type { ActorScope } from "#app/server/scope.server.ts";
 import type { UploadedFile } from "#app/server/upload.server.ts";
 import { leave, scopeOfPerson } from "#tests/db/people.ts";
 import { asOwner, useDatabase } from "#tests/db/test-database.ts";
+import { heardOf, listen } from "./listening.ts";
 import { assessFirstFlow } from "./lot-on-sheet.ts";
 
 const database = useDatabase({ demo: true });
@@ -155,7 +156,12 @@ describe("a report", () => {
           [id],
         )
       ).map(({ name }) => name);
-    const small = await told(await store(engineer, report({ severity: "near miss", broken: "0" })));
+    await listen(database, "engineer", "tern");
+    const id = await store(engineer, report({ severity: "near miss", broken: "0" }));
+    const small = await told(id);
+    expect(await heardOf(database, id)).toMatchObject([
+      { event: "incident.reported", program: { slug: "tern" }, data: { incident_id: id, severity: "near miss" } },
+    ]);
     expect(small).not.toContain(technician.actor.name);
     expect(small).not.toContain(guest.actor.name);
     expect(small.length).toBeGreaterThan(0);

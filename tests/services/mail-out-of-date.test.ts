@@ -3,6 +3,7 @@ import type { Announcement } from "#app/schemas/announcement.ts";
 import type { ActorScope } from "#app/server/scope.server.ts";
 import { scopeOfPerson } from "#tests/db/people.ts";
 import { asOwner, useDatabase } from "#tests/db/test-database.ts";
+import { heardOf, listen } from "./listening.ts";
 
 const database = useDatabase({ demo: true });
 const looking = () => import("#app/services/assessments/announce-out-of-date.server.ts");
@@ -61,6 +62,7 @@ test("a save tells who prepared the newest assessment and the process owners, ea
   await look();
   expect((await rows()).map(({ key }) => key)).not.toContain(id);
 
+  await listen(database, "engineer", "tern");
   await saveFilm(flow?.film ?? "", 123e6, owner);
   await look();
   await look();
@@ -71,6 +73,13 @@ test("a save tells who prepared the newest assessment and the process owners, ea
   ]);
   expect(of[0]?.announcement).toMatchObject({ program: "Tern", flow: flow?.name, path: `/assessments/${id}` });
   expect(of[0]?.announcement.assessment).toMatch(/^TERN-A\d{3}$/);
+  expect(await heardOf(database, id)).toMatchObject([
+    {
+      event: "assessment.out_of_date",
+      program: { slug: "tern", name: "Tern" },
+      data: { assessment_id: id, assessment: of[0]?.announcement.assessment, flow: flow?.name },
+    },
+  ]);
   expect(of[0]?.announcement.changes.join()).toContain(flow?.film);
   // A recipe does not leave the site by mail.
   expect(JSON.stringify(of[0]?.announcement)).not.toMatch(/123|MPa/);

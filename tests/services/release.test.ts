@@ -3,6 +3,7 @@ import { refusedSentence } from "#app/server/problem.server.ts";
 import type { ActorScope } from "#app/server/scope.server.ts";
 import { scopeOfPerson } from "#tests/db/people.ts";
 import { asOwner, useDatabase } from "#tests/db/test-database.ts";
+import { heardOf, listen } from "./listening.ts";
 import { assessFirstFlow } from "./lot-on-sheet.ts";
 
 const database = useDatabase({ demo: true });
@@ -165,10 +166,22 @@ test(
     const { storedSheet } = await files();
     const { sheetStatus } = await statuses();
     const released = await storedSheet(owner, first.revision, PAPER);
+    await listen(database, "guest", "tern");
     second = await inReview("tern");
     await releaseRevision(owner, second.revision, "", ORIGIN);
     expect(await stateOf(first.revision)).toMatchObject({ state: "superseded", superseded_by: 2 });
     expect(await stateOf(second.revision)).toMatchObject({ state: "released", number: 2 });
+    const sheet = { sheet: "TERN-H001", flow: expect.any(String) as string };
+    expect(await heardOf(database, second.revision)).toMatchObject([
+      {
+        event: "sheet.released",
+        program: { slug: "tern" },
+        data: { ...sheet, revision_id: second.revision, revision: "B" },
+      },
+    ]);
+    expect(await heardOf(database, first.revision)).toMatchObject([
+      { event: "sheet.superseded", data: { ...sheet, revision_id: first.revision, revision: "A", superseded_by: "B" } },
+    ]);
     const marked = await storedSheet(owner, first.revision, PAPER);
     expect(marked.bytes).not.toEqual(released.bytes);
     expect((await storedSheet(owner, first.revision, PAPER)).bytes).toEqual(marked.bytes);

@@ -11,8 +11,9 @@ export function ApiPage({ groups }: ApiReference) {
       <PageHead title="API" remark="version 1" />
       <p className="max-w-160 pb-4">
         Scripts, instruments and other systems of the site ask here, with a <Link to="/tokens">token</Link>. The same is
-        to be had as <a href="/api/v1/openapi.json">OpenAPI 3.1</a>, for programs that make programs. What is answered
-        supports the site’s own procedures and does not take their place.
+        to be had as <a href="/api/v1/openapi.json">OpenAPI 3.1</a>, for programs that make programs. What happens is
+        told by <Link to="/webhooks">webhooks</Link>. What is answered supports the site’s own procedures and does not
+        take their place.
       </p>
       <nav aria-label="Operations" className="screen-only flex flex-wrap gap-x-4 gap-y-1 pb-4">
         <a href="#manner">How it is asked</a>

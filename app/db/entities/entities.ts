@@ -66,6 +66,8 @@ import { Incident } from "./incident.ts";
 import { IncidentNote } from "./incident-note.ts";
 import { IncidentPhoto } from "./incident-photo.ts";
 import { HandOver } from "./hand-over.ts";
+import { Webhook } from "./webhook.ts";
+import { WebhookDelivery } from "./webhook-delivery.ts";
 
 /** Every entity, listed by hand: the ORM finds nothing by itself. */
 export const entities = [
@@ -134,6 +136,8 @@ export const entities = [
   Preference,
   MailOutbox,
   MailChoice,
+  Webhook,
+  WebhookDelivery,
   DemoRecord,
   AuditEvent,
   AuditSeal,

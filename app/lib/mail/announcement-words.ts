@@ -41,6 +41,8 @@ function wordsOf(announcement: Announcement): AnnouncementWords {
       return ofSheet(announcement);
     case "assessment out of date":
       return ofAssessment(announcement);
+    case "webhook switched off":
+      return ofWebhook(announcement);
     case "incident":
     case "step stopped":
     case "lot held":
@@ -134,6 +136,18 @@ function ofAssessment(announcement: Of<"assessment out of date">): AnnouncementW
     said: { heading: "Changed since", lines: more > 0 ? [...lines, `and ${more} more`] : lines },
     mind: null,
     open: "See what has changed",
+  };
+}
+
+function ofWebhook(announcement: Of<"webhook switched off">): AnnouncementWords {
+  const webhook = oneLine(announcement.webhook);
+  return {
+    subject: `webhook ${webhook} was switched off`,
+    sentence: `The webhook ${webhook} was switched off, because ${announcement.failures} attempts in a row have failed in three days. Nothing is sent to it any more.`,
+    facts: [{ label: "Webhook", value: webhook }],
+    said: null,
+    mind: "Mend the receiver, then switch the webhook on again and send a test. What was not taken can be sent once more from its log.",
+    open: "Open the webhook",
   };
 }
 

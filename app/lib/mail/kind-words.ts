@@ -11,4 +11,5 @@ export const KIND_WORDS: Record<AnnouncementKind, string> = {
   "sheet superseded": "A sheet is superseded",
   "sheet withdrawn": "A sheet is withdrawn",
   "assessment out of date": "An assessment is out of date",
+  "webhook switched off": "A webhook of yours was switched off",
 };

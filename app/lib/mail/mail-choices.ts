@@ -24,6 +24,7 @@ export const KINDS_OF_MAIL: Record<AnnouncementKind, KindOfMail> = {
   "sheet superseded": { essential: false, delivered: "at once", readers: "see released sheets" },
   "sheet withdrawn": { essential: false, delivered: "at once", readers: "see released sheets" },
   "assessment out of date": { essential: false, delivered: "daily digest", readers: "see the work" },
+  "webhook switched off": { essential: true, delivered: "at once", readers: "keep webhooks" },
 };
 
 export const ANNOUNCEMENT_KINDS = Object.keys(KINDS_OF_MAIL) as AnnouncementKind[];

@@ -7,7 +7,7 @@ export const meta: Route.MetaFunction = () => [{ title: "Hand-overs · Floor · 
 
 export async function loader({ context, url }: Route.LoaderArgs) {
   const scope = scopeOf(context);
-  const query = (url.searchParams.get("place") ?? "").trim().slice(0, 80);
+  const query = (url.searchParams.get("place") ?? "").replaceAll("\0", "").trim().slice(0, 80);
   return {
     query,
     rows: await handOvers(scope, query),

@@ -6,6 +6,7 @@ import { inputChanges } from "#app/lib/input-changes.ts";
 import type { AssessmentInput, InputChange } from "#app/schemas/assessment-changes.ts";
 import { inScope, type ActorScope, type Scope } from "#app/server/scope.server.ts";
 import { actorById } from "../actor.server.ts";
+import { raiseEvent } from "../webhooks/raise-event.server.ts";
 import { announce } from "../mail/announce.server.ts";
 import { outOfDateAmong } from "./out-of-date.server.ts";
 import { presentFlow } from "./present-inputs.server.ts";
@@ -33,16 +34,24 @@ export async function announceOutOfDate(): Promise<void> {
     const actor = first === undefined ? null : await actorById(first, work.requestId);
     if (!actor) continue;
     const found = await outOfDateIn(program, { actor, requestId: work.requestId });
-    for (const { id, preparedBy, onlyBy, ...said } of found) {
-      await inScope(work, (em) =>
-        announce(em, {
+    for (const { id, slug, preparedBy, onlyBy, ...said } of found) {
+      await inScope(work, async (em) => {
+        await announce(em, {
           program,
           key: id,
           to: [preparedBy, ...people],
           by: onlyBy,
           announcement: { kind: "assessment out of date", ...said, path: `/assessments/${id}` },
-        }),
-      );
+        });
+        await raiseEvent(em, {
+          program: { id: program, slug, name: said.program },
+          event: "assessment.out_of_date",
+          key: id,
+          about: said.assessment,
+          by: null,
+          data: { assessment_id: id, assessment: said.assessment, flow: said.flow },
+        });
+      });
       told.add(id);
     }
   }
@@ -51,6 +60,7 @@ export async function announceOutOfDate(): Promise<void> {
 interface Found {
   id: string;
   program: string;
+  slug: string;
   flow: string;
   assessment: string;
   changes: string[];
@@ -108,6 +118,7 @@ async function describe(em: EntityManager, scope: ActorScope, row: NewestRow): P
   return {
     id: row.id,
     program: row.program,
+    slug: row.slug,
     flow: flow.name,
     assessment: recordNumber("assessment", row.slug, row.document_number),
     changes: lines.slice(0, NAMED),

@@ -15,7 +15,8 @@ export interface DemoKind {
     | "step_stop"
     | "floor_entry"
     | "wafer_measurement"
-    | "wafer_scan";
+    | "wafer_scan"
+    | "webhook";
   one: string;
   many: string;
   /** which rows go: of `programs` of the demo, or of what of its library is not among the `kept` */
@@ -66,6 +67,7 @@ export const DEMO_KINDS: readonly DemoKind[] = [
     at: "x.asked_at",
   }),
   ofProgram("api_token", "API token", "x.name", { by: "x.person_id" }),
+  ofProgram("webhook", "webhook", "x.name"),
   ofProgram("delegation", "delegation", "x.reason", { by: "x.owner_id" }),
   ofProgram("step_measurement", "bow measured after a step", "x.wafer || ', ' || x.step_title", {
     many: "bows measured after a step",

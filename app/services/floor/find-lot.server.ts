@@ -18,7 +18,8 @@ const ADDRESS = /\/lots\/([0-9a-f]{8}(?:-[0-9a-f]{4}){3}-[0-9a-f]{12})\b/i;
  */
 export async function findLots(scope: ActorScope, typed: string): Promise<FoundLots> {
   requireInSomeProgram(scope, "work on the floor");
-  const query = typed.trim().slice(0, 200);
+  // NUL is no character to the database.
+  const query = typed.replaceAll("\0", "").trim().slice(0, 200);
   const programs = programsWhere(scope.actor, "work on the floor").map(({ programId }) => programId);
   return inScope(scope, async (em) => {
     const mine = await lotsWhere(

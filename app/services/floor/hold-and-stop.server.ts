@@ -62,7 +62,14 @@ export async function stopStep(
       ...opened(scope),
     });
     await em.flush();
-    await tellOfStop(em, scope, { id, lot, program, reason, flow: revision.title, step: `${number}, ${step.title}` });
+    await tellOfStop(em, scope, {
+      id,
+      lot,
+      program,
+      reason,
+      flow: revision.title,
+      step: { number, title: step.title },
+    });
   });
 }
 

@@ -1,12 +1,13 @@
 import type { EntityManager } from "@mikro-orm/postgresql";
 import type { ActorScope } from "#app/server/scope.server.ts";
+import { raiseEvent } from "../webhooks/raise-event.server.ts";
 import { announce } from "../mail/announce.server.ts";
 import { peopleOf } from "../people/people-of.server.ts";
 
 interface Held {
   id: string;
   lot: { id: string; name: string };
-  program: { id: string; name: string };
+  program: { id: string; name: string; slug: string };
   reason: string;
 }
 
@@ -34,8 +35,7 @@ export async function tellOfHold(
 
 interface Stopped extends Held {
   flow: string;
-  /** the step by number and title */
-  step: string;
+  step: { number: number; title: string };
 }
 
 /** Tells everybody who works in the program that no lot may begin a step, and why. */
@@ -52,12 +52,20 @@ export async function tellOfStop(
       by: scope.actor.name,
       path: `/lots/${lot.id}`,
       flow,
-      step,
+      step: `${step.number}, ${step.title}`,
       reason,
     },
     key: id,
     to: await staffOf(em, program.id),
     by: scope.actor.id,
+  });
+  await raiseEvent(em, {
+    program: { id: program.id, slug: program.slug, name: program.name },
+    event: "step.stopped",
+    key: id,
+    about: `Step ${step.number}, ${step.title}`,
+    by: scope.actor.id,
+    data: { stop_id: id, lot_id: lot.id, lot: lot.name, flow, step: step.number, step_title: step.title },
   });
 }
 

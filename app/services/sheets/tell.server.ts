@@ -3,6 +3,7 @@ import { revisionLetters } from "#app/lib/assessment-revision.ts";
 import { recordNumber } from "#app/lib/record-number.ts";
 import type { AnnouncementInput } from "#app/schemas/announcement.ts";
 import type { ActorScope } from "#app/server/scope.server.ts";
+import { raiseEvent } from "../webhooks/raise-event.server.ts";
 import { announce } from "../mail/announce.server.ts";
 import { peopleOf } from "../people/people-of.server.ts";
 import { findRevision, type FoundRevision } from "./revision.server.ts";
@@ -47,13 +48,28 @@ export async function tellReleased(
     revision: letterOf(revision),
     changes: revision.changes ?? [],
   });
-  if (superseded)
+  const released = eventData(revision);
+  await raiseEvent(em, {
+    ...raisedBy(scope, revision),
+    event: "sheet.released",
+    about: `${released.sheet} ${released.revision}`,
+    data: released,
+  });
+  if (superseded) {
     await tell(em, scope, superseded, everybody, {
       kind: "sheet superseded",
       ...about(scope, superseded, sheetPath(revision)),
       revision: letterOf(superseded),
       supersededBy: letterOf(revision),
     });
+    const former = eventData(superseded);
+    await raiseEvent(em, {
+      ...raisedBy(scope, superseded),
+      event: "sheet.superseded",
+      about: `${former.sheet} ${former.revision}`,
+      data: { ...former, superseded_by: released.revision },
+    });
+  }
 }
 
 /** Tells everybody of the program that a sheet must not be used any more. */
@@ -70,6 +86,20 @@ export async function tellWithdrawn(em: EntityManager, scope: ActorScope, revisi
 const letterOf = ({ number }: FoundRevision) => revisionLetters(number ?? 1);
 const reviewPath = ({ assessment }: FoundRevision) => `/assessments/${assessment.id}/review`;
 const sheetPath = ({ id }: FoundRevision) => `/sheets/revisions/${id}`;
+
+const eventData = (revision: FoundRevision) => ({
+  revision_id: revision.id,
+  assessment_id: revision.assessment.id,
+  sheet: recordNumber("sheet", revision.program.slug, revision.sheet.number),
+  revision: letterOf(revision),
+  flow: revision.title,
+});
+
+const raisedBy = ({ actor }: ActorScope, { id, program }: FoundRevision) => ({
+  program: { id: program.id, slug: program.slug, name: program.name },
+  key: id,
+  by: actor.id,
+});
 
 function about({ actor }: ActorScope, { program, sheet, title }: FoundRevision, path: string) {
   return {

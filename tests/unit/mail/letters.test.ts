@@ -18,6 +18,7 @@ const SUBJECTS: Record<Announcement["kind"], string> = {
   "assessment out of date": "Tern: assessment TERN-A003 is out of date",
   incident: "Tern: incident with lot T-0412",
   "step stopped": "Tern: stopped, step 14, debond",
+  "webhook switched off": "Tern: webhook Line board was switched off",
   "lot held": "Tern: lot T-0412 is held",
 };
 

@@ -1,0 +1,70 @@
+import { getCollectionProps, getFormProps, type FieldMetadata, type SubmissionResult } from "@conform-to/react";
+import { Form } from "react-router";
+import { ChoiceField } from "#app/components/forms/ChoiceField.tsx";
+import { LineField } from "#app/components/forms/LineField.tsx";
+import { SubmitButton } from "#app/components/forms/SubmitButton.tsx";
+import { useRecordForm } from "#app/components/forms/use-record-form.ts";
+import { PasswordField } from "#app/components/people/PasswordField.tsx";
+import { eventWords, WEBHOOK_EVENT_NAMES, type WebhookEventName, type WebhooksView } from "#app/schemas/webhook.ts";
+
+interface Props {
+  programs: WebhooksView["programs"];
+  lastResult: SubmissionResult<string[]> | undefined;
+  proofAsked: boolean;
+  proofFault: string | undefined;
+}
+
+interface Values extends Record<string, unknown> {
+  name: string;
+  program: string;
+  address: string;
+  events: string[];
+}
+
+/** The form in which a person makes a webhook. */
+export function MakeWebhook({ programs, lastResult, proofAsked, proofFault }: Props) {
+  const [form, { name, program, address, events }] = useRecordForm<Values>({ id: "webhook", lastResult });
+  return (
+    <section aria-labelledby="make-webhook" className="frame p-4">
+      <h2 id="make-webhook" className="font-semibold">
+        Make a webhook
+      </h2>
+      <Form method="post" {...getFormProps(form)} className="mt-3 space-y-2">
+        <LineField field={name} label="What receives it" hint="Such as: line board of bay 3." />
+        <ChoiceField
+          field={program}
+          label="Program"
+          choices={programs.map(({ id, name: label }) => ({ value: id, label }))}
+          blank="Choose a program"
+          hint="It hears of no other."
+        />
+        <LineField
+          field={address}
+          label="Address"
+          hint="Put no password into it: every delivery is signed."
+          input={{ inputMode: "url", autoCapitalize: "none", spellCheck: false, placeholder: "https://" }}
+        />
+        <Events field={events} />
+        {proofAsked && <PasswordField name="proof" label="Your password, to make it" error={proofFault} />}
+        <SubmitButton busy="Making">Make the webhook</SubmitButton>
+      </Form>
+    </section>
+  );
+}
+
+function Events({ field }: { field: FieldMetadata<string[]> }) {
+  return (
+    <fieldset className="field" aria-describedby={field.errorId}>
+      <legend className="mb-1 text-label text-quiet">When it is told</legend>
+      {getCollectionProps(field, { type: "checkbox", options: [...WEBHOOK_EVENT_NAMES] }).map(({ key, ...box }) => (
+        <label key={key} className="mb-0 flex min-h-8 items-center gap-2 text-body text-ink">
+          <input {...box} className="size-4 accent-ink" />
+          <span>{eventWords(box.value as WebhookEventName)}</span>
+        </label>
+      ))}
+      <small id={field.errorId}>
+        {field.errors?.[0] ?? "It is told what your own role may read, and nothing more."}
+      </small>
+    </fieldset>
+  );
+}

@@ -1,0 +1,17 @@
+import { randomBytes } from "node:crypto";
+import { seal, unseal } from "#app/server/sealed-secret.server.ts";
+
+/** By what the secret of a webhook is known for one of ours, where somebody finds it in a file. */
+const PREFIX = "pwh_";
+
+const purposeOf = (webhookId: string) => `webhook ${webhookId}`;
+
+/** A new secret of a webhook, and the same as it is kept. */
+export function newSecret(webhookId: string): { secret: string; sealedSecret: string } {
+  const secret = `${PREFIX}${randomBytes(32).toString("base64url")}`;
+  return { secret, sealedSecret: seal(secret, purposeOf(webhookId)) };
+}
+
+/** @throws where it was sealed under another secret of the environment */
+export const readSecret = (webhookId: string, sealedSecret: string): string =>
+  unseal(sealedSecret, purposeOf(webhookId));
