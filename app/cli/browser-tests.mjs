@@ -10,6 +10,7 @@ import { mailSettings } from "./mail-server.mjs";
 import { freePort, loopback } from "./ports.mjs";
 import { prepareDatabase } from "./prepare.mjs";
 import { packageProgram, root } from "./project.mjs";
+import { newSecretKey } from "./secrets.mjs";
 import { Sentence } from "./sentence.mjs";
 import { serveBuild } from "./server.mjs";
 import { tallyPlaywright } from "./tally.mjs";
@@ -33,7 +34,7 @@ async function serveForTests({ keeper, env }, { folder, database, accountsFile }
   const logFile = join(folder, "server.log");
   const mailFolder = join(folder, "mail");
   const served = await mailSettings(keeper, {
-    env: { ...env, DATABASE_URL: access.appUrl, SMTP_URL: undefined },
+    env: { ...env, DATABASE_URL: access.appUrl, SECRET_KEY: newSecretKey(), SMTP_URL: undefined },
     address: `http://${loopback}:${port}`,
     folder: mailFolder,
     own: true,

@@ -15,16 +15,29 @@ export function newPasswords() {
   return { administrator: password(), owner: password(), app: password() };
 }
 
+/** @returns {string} 32 random bytes, from which the server derives the keys that it encrypts and signs with */
+export const newSecretKey = () => randomBytes(32).toString("base64url");
+
 /**
- * The passwords of this copy's own database: made once, readable by this account alone.
+ * A secret of this copy: made once, readable by this account alone.
  *
- * @returns {DatabasePasswords}
+ * @template Secret
+ * @param {string} name
+ * @param {() => Secret} make
+ * @returns {Secret}
  */
-export function keptPasswords() {
+function kept(name, make) {
   const file = join(ownFolder, "secrets.json");
-  if (existsSync(file)) return JSON.parse(readFileSync(file, "utf8")).database;
-  const passwords = newPasswords();
-  writeFileSync(`${file}.new`, `${JSON.stringify({ database: passwords }, null, 2)}\n`, { mode: 0o600 });
+  const known = existsSync(file) ? JSON.parse(readFileSync(file, "utf8")) : {};
+  if (known[name] !== undefined) return known[name];
+  const made = make();
+  writeFileSync(`${file}.new`, `${JSON.stringify({ ...known, [name]: made }, null, 2)}\n`, { mode: 0o600 });
   renameSync(`${file}.new`, file);
-  return passwords;
+  return made;
 }
+
+/** @returns {DatabasePasswords} of this copy's own database */
+export const keptPasswords = () => kept("database", newPasswords);
+
+/** @returns {string} this copy's key, where the environment names none */
+export const keptSecretKey = () => kept("key", newSecretKey);

@@ -21,6 +21,7 @@ import { loopback, requireFreePort, wantedPort } from "./ports.mjs";
 import { prepareDatabase } from "./prepare.mjs";
 import { makeOwnFolder, ownFolder } from "./project.mjs";
 import { stopRecorded } from "./run-record.mjs";
+import { keptSecretKey } from "./secrets.mjs";
 import { Sentence, printFailure } from "./sentence.mjs";
 import { serveBuild, serveSources } from "./server.mjs";
 import { keepWorker } from "./worker.mjs";
@@ -73,7 +74,12 @@ async function run(keeper, { port, external }) {
   // The server gets the plain role alone.
   const address = `http://${loopback}:${port}`;
   const env = await mailSettings(keeper, {
-    env: { ...process.env, DATABASE_URL: database.appUrl, DATABASE_OWNER_URL: undefined },
+    env: {
+      ...process.env,
+      DATABASE_URL: database.appUrl,
+      DATABASE_OWNER_URL: undefined,
+      SECRET_KEY: process.env.SECRET_KEY || keptSecretKey(),
+    },
     address,
     folder: join(ownFolder, "mail"),
     own: !external,

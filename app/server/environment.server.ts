@@ -6,6 +6,8 @@ const schema = z
     ...mailSettings,
     NODE_ENV: z.enum(["production", "development", "test"]).default("production"),
     DATABASE_URL: z.url({ protocol: /^postgres(ql)?$/ }),
+    /** what the keys that the server encrypts and signs with are derived from; made by `npm start` where it is not set */
+    SECRET_KEY: z.string().regex(/^[\w-]{43,200}$/, "write 43 or more letters, digits, - and _, made at random"),
     /** comma-separated origins that may post forms besides the server's own, for a proxy in front */
     ALLOWED_ORIGINS: z
       .string()

@@ -107,6 +107,7 @@ describe("every table", () => {
     "person",
     "credential",
     "session",
+    "one_time_codes",
     "person_token",
     "membership",
     "program",

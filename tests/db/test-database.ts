@@ -1,4 +1,4 @@
-import { randomUUID } from "node:crypto";
+import { randomBytes, randomUUID } from "node:crypto";
 import { MikroORM } from "@mikro-orm/postgresql";
 import { afterAll, beforeAll } from "vitest";
 import { databaseOptions } from "#app/db/options.ts";
@@ -52,6 +52,7 @@ export function useDatabase({ demo = false }: { demo?: boolean } = {}): TestData
       await database.owner.em.fork().getConnection().execute(statement);
     if (demo) await database.owner.seeder.seed(DemoSeeder);
     process.env["DATABASE_URL"] = database.appUrl;
+    process.env["SECRET_KEY"] = randomBytes(32).toString("base64url");
     process.env["LOG_LEVEL"] = "silent";
   });
   afterAll(async () => {

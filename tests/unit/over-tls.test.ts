@@ -12,6 +12,7 @@ afterEach(() => {
 function siteAt(address: string | undefined): void {
   vi.resetModules();
   vi.stubEnv("DATABASE_URL", "postgresql://nobody@127.0.0.1:1/none");
+  vi.stubEnv("SECRET_KEY", "k".repeat(43));
   vi.stubEnv("PUBLIC_ADDRESS", address);
 }
 

@@ -31,6 +31,7 @@ import { ApiTokens } from "./2026-12-17-api-tokens.ts";
 import { ApiAnswers } from "./2026-12-17-api-answers.ts";
 import { PrintRetention } from "./2026-12-18-print-retention.ts";
 import { AuditSeal } from "./2026-12-19-audit-seal.ts";
+import { OneTimeCodes } from "./2026-12-20-one-time-codes.ts";
 
 /** Every migration in the order in which it runs. */
 export const migrations = [
@@ -67,4 +68,5 @@ export const migrations = [
   { name: "2026-12-17-api-answers", class: ApiAnswers },
   { name: "2026-12-18-print-retention", class: PrintRetention },
   { name: "2026-12-19-audit-seal", class: AuditSeal },
+  { name: "2026-12-20-one-time-codes", class: OneTimeCodes },
 ];
