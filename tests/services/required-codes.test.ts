@@ -4,7 +4,7 @@ import { createDemoAccounts, setDemoPasswords } from "#app/db/seeders/demo-accou
 import type { Role } from "#app/policies/roles.ts";
 import type { ActorScope } from "#app/server/scope.server.ts";
 import { asOwner, useDatabase } from "#tests/db/test-database.ts";
-import { codesOn, signedIn } from "./codes-of.ts";
+import { codeIn, codesOn, signedIn } from "./codes-of.ts";
 import { sendWaitingMail } from "./mailed-links.ts";
 
 const database = useDatabase({ demo: true });
@@ -148,4 +148,37 @@ test("an administrator resets another's codes: their sessions end, the password 
   expect(trail).toEqual([{ action: "removed" }]);
   await expect(resetCodes(administrator, id)).rejects.toMatchObject(status(409));
   await expect(resetCodes(administrator, administrator.actor.id)).rejects.toMatchObject(status(409));
+});
+
+test("setting them up ends the session that could do nothing else and begins another, and shows the recovery codes once", async () => {
+  const { action, loader } = await import("#app/routes/_auth/set-up-codes.tsx");
+  const { heldContext } = await import("#app/server/contexts.server.ts");
+  const { sessionCookie, tokenOf } = await import("#app/server/session-cookie.server.ts");
+  const { resumeSession } = await import("#app/services/sessions.server.ts");
+  await ask("technician");
+  const { scope, token } = await signedIn(database, "technician");
+  if (!scope.session) throw new Error("no session");
+  const context = new RouterContextProvider();
+  context.set(heldContext, { actor: scope.actor, session: scope.session });
+  const url = new URL("http://127.0.0.1/sign-in/set-up?next=%2Ffloor");
+  const cookie = await sessionCookie(new Request(url), { token, expiresAt: new Date(Date.now() + 60_000) });
+  const send = async (form: Record<string, string>) => {
+    const headers = { Cookie: cookie.split(";")[0] ?? "" };
+    const request = new Request(url, { method: "POST", body: new URLSearchParams(form), headers });
+    return action({ request, context, url, params: {} } as unknown as Parameters<typeof action>[0]);
+  };
+  const look = () => loader({ context, url } as unknown as Parameters<typeof loader>[0]);
+  expect(await look()).toMatchObject({ waiting: null, next: "/floor" });
+  await expect(send({ intent: "begin" })).rejects.toMatchObject({ status: 302 });
+  const secret = (await look()).waiting?.secret ?? "";
+  expect(await send({ intent: "confirm", code: "12" })).toMatchObject({
+    data: { recovery: null },
+    init: { status: 400 },
+  });
+  const done = await send({ intent: "confirm", code: codeIn(secret) });
+  expect(done.data).toMatchObject({ recovery: { length: 10 } });
+  const set = new Headers(done.init?.headers).get("Set-Cookie") ?? "";
+  const next = await tokenOf(new Request(url, { headers: { Cookie: set.split(";")[0] ?? "" } }));
+  expect(await resumeSession(token, "test")).toBeNull();
+  expect((await resumeSession(next ?? "", "test"))?.session.codes).toBe("on");
 });
