@@ -9,6 +9,8 @@ export default defineConfig({
     exclude: ["tests/browser/**"],
     environment: "node",
     passWithNoTests: false,
+    // Most files wait for a database half of their time, so that both of two cores are used (the default leaves one free).
+    maxWorkers: 2,
     // A busy machine makes a test late, not wrong: these only end what hangs. How fast things are is measured by the benchmarks.
     testTimeout: 30_000,
     hookTimeout: 90_000,

@@ -45,6 +45,10 @@ export async function ended(child) {
 export class Keeper {
   #record = emptyRecord();
   #stopping = false;
+  /** @type {() => void} */
+  #tellStopping = () => undefined;
+  /** Fulfilled when stopping begins. */
+  whenStopping = /** @type {Promise<void>} */ (new Promise((resolve) => (this.#tellStopping = resolve)));
   /** @type {Promise<void> | undefined} */
   #stopped;
   /** @type {import("node:child_process").ChildProcess} */
@@ -180,6 +184,7 @@ export class Keeper {
 
   async #stopAll() {
     this.#stopping = true;
+    this.#tellStopping();
     const guardGone = new Promise((resolve) => this.#guard.once("exit", resolve));
     this.#guard.stdin?.end();
     await guardGone;

@@ -2,6 +2,7 @@ import { closeSync, openSync } from "node:fs";
 import { setTimeout as pause } from "node:timers/promises";
 import { builtServer } from "./build.mjs";
 import { hasEnded } from "./keeper.mjs";
+import { keepRunning } from "./keep-running.mjs";
 import { lastLinesOf, rotateLog } from "./logs.mjs";
 import { loopback, requireFreePort } from "./ports.mjs";
 import { packageProgram, root } from "./project.mjs";
@@ -53,26 +54,30 @@ async function waitUntilHealthy(keeper, server, port, logFile) {
 }
 
 /**
- * Serves the production build on the loopback address.
+ * Serves the production build on the loopback address. Once it was well, it is started again whenever it ends before everything is
+ * stopped: what is under way then is asked again, and nobody has to come.
  *
  * @param {import("./keeper.mjs").Keeper} keeper
  * @param {{ port: number, env: NodeJS.ProcessEnv, logFile: string }} options
- * @returns {Promise<import("node:child_process").ChildProcess>} the server, once it is well
  */
 export async function serveBuild(keeper, { port, env, logFile }) {
   await requireFreePort(port);
   rotateLog(logFile);
-  const log = openSync(logFile, "a", 0o600);
-  const server = keeper.start(process.execPath, [packageProgram("react-router-serve"), builtServer], {
-    cwd: root,
-    env: { ...env, NODE_ENV: "production", HOST: loopback, PORT: String(port) },
-    // The server's own access lines hold whole addresses, with what people searched for: only Planeward's log is kept.
-    stdio: ["ignore", "ignore", log],
-    stop,
-  });
-  closeSync(log);
-  await waitUntilHealthy(keeper, server, port, logFile);
-  return server;
+  const start = () => {
+    const log = openSync(logFile, "a", 0o600);
+    const server = keeper.start(process.execPath, [packageProgram("react-router-serve"), builtServer], {
+      cwd: root,
+      env: { ...env, NODE_ENV: "production", HOST: loopback, PORT: String(port) },
+      // The server's own access lines hold whole addresses, with what people searched for: only Planeward's log is kept.
+      stdio: ["ignore", "ignore", log],
+      stop,
+    });
+    closeSync(log);
+    return server;
+  };
+  const first = start();
+  await waitUntilHealthy(keeper, first, port, logFile);
+  keepRunning(keeper, first, start);
 }
 
 /**

@@ -84,9 +84,8 @@ async function run(keeper, { port, external }) {
     folder: join(ownFolder, "mail"),
     own: !external,
   });
-  const server = isDev
-    ? await serveSources(keeper, { port, env })
-    : await serveBuild(keeper, { port, env, logFile: serverLog });
+  const sources = isDev ? await serveSources(keeper, { port, env }) : undefined;
+  if (!isDev) await serveBuild(keeper, { port, env, logFile: serverLog });
   const mode = isDev ? "development" : "production";
   keepWorker(keeper, { env: { ...env, NODE_ENV: mode }, ...(!isDev && { logFile: workerLog }) });
 
@@ -94,9 +93,11 @@ async function run(keeper, { port, external }) {
   const accounts = external ? [] : demoAccountLines(accountsFile);
   console.log(["", `Planeward ${doing}`, "", ...accounts, ...(accounts.length ? [""] : [])].join("\n"));
 
-  await Promise.race([server, ...(database.server ? [database.server] : [])].map(ended));
+  // A server of sources ends with what is wrong with them, a database may not be well; everything else is started again.
+  const lasting = [sources, database.server].filter((child) => child !== undefined);
+  await Promise.race([keeper.whenStopping, ...lasting.map(ended)]);
   if (keeper.stopping) return 0;
-  if (hasEnded(server)) throw new Sentence("The server has ended by itself.", isDev ? "" : lastLinesOf(serverLog));
+  if (sources && hasEnded(sources)) throw new Sentence("The server has ended by itself.");
   throw new Sentence("The database server has ended by itself.", lastLinesOf(databaseLog));
 }
 

@@ -1,6 +1,6 @@
 import { closeSync, openSync } from "node:fs";
 import { join } from "node:path";
-import { ended } from "./keeper.mjs";
+import { keepRunning } from "./keep-running.mjs";
 import { rotateLog } from "./logs.mjs";
 import { root } from "./project.mjs";
 
@@ -9,11 +9,6 @@ const stop = /** @type {[NodeJS.Signals, number][]} */ ([
   ["SIGTERM", 10_000],
   ["SIGKILL", 5_000],
 ]);
-
-/** Pause before a worker that has ended is started again, milliseconds: doubled each time that it did not last a minute. */
-const shortestPause = 250;
-const longestPause = 30_000;
-const lasting = 60_000;
 
 /**
  * Runs the worker, the process that does the jobs which take longer than a request, and starts it again whenever it
@@ -24,9 +19,7 @@ const lasting = 60_000;
  */
 export function keepWorker(keeper, { env, logFile }) {
   if (logFile) rotateLog(logFile);
-  let wait = shortestPause;
   const start = () => {
-    const began = Date.now();
     const log = logFile ? openSync(logFile, "a", 0o600) : undefined;
     const worker = keeper.start(process.execPath, ["--import", "tsx", join(root, "app/jobs/worker.ts")], {
       cwd: root,
@@ -35,12 +28,7 @@ export function keepWorker(keeper, { env, logFile }) {
       stop,
     });
     if (log !== undefined) closeSync(log);
-    void ended(worker).then(() => {
-      wait = Date.now() - began > lasting ? shortestPause : Math.min(wait * 2, longestPause);
-      setTimeout(() => {
-        if (!keeper.stopping) start();
-      }, wait).unref();
-    });
+    return worker;
   };
-  start();
+  keepRunning(keeper, start(), start);
 }

@@ -9,7 +9,7 @@ export interface PredictedBow {
 }
 
 /** What a step says of the bow at 25 °C; null where it is held flat, rolled, or no wafer of this leg takes it. */
-function bowOf({ number, title, atRoom, skipped }: StepResult): PredictedBow | null {
+export function bowOfStep({ number, title, atRoom, skipped }: StepResult): PredictedBow | null {
   if (skipped || !atRoom || atRoom.regime === "curled" || atRoom.rollRadius !== null) return null;
   return { step: number, title, bow: atRoom.bow, standardUncertainty: atRoom.standardUncertainty ?? 0 };
 }
@@ -19,7 +19,7 @@ export function measurableSteps(result: AssessmentResult): { step: number; title
   const found = new Map<number, string>();
   for (const leg of legsOf(result))
     for (const step of leg.steps) {
-      const bow = bowOf(step);
+      const bow = bowOfStep(step);
       if (bow) found.set(bow.step, bow.title);
     }
   return [...found].toSorted(([a], [b]) => a - b).map(([step, title]) => ({ step, title }));
@@ -39,7 +39,7 @@ export function predictedBow(result: AssessmentResult, step: number, slot: numbe
   const found = leg.steps.find(({ number }) => number === step);
   if (!found) return `there is no step ${step}`;
   return (
-    bowOf(found) ?? `after step ${step} it has no bow of its own: it is held, rolled up, or does not take the step`
+    bowOfStep(found) ?? `after step ${step} it has no bow of its own: it is held, rolled up, or does not take the step`
   );
 }
 

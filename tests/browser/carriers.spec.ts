@@ -1,5 +1,12 @@
 import type { Locator, Page } from "@playwright/test";
-import { expect, expectNoAxeFindings, signIn, signInAtToday, test } from "./support.ts";
+import {
+  expect,
+  expectNoAxeFindings,
+  expectNoAxeFindingsInBothThemes,
+  signIn,
+  signInAtToday,
+  test,
+} from "./support.ts";
 
 const LISTS = ["carriers", "bonding-materials", "tapes", "silicon", "tools"];
 
@@ -349,33 +356,28 @@ test.describe("who may do what", () => {
   });
 });
 
-const CHECKED = { light: LISTS, dark: ["bonding-materials"] };
-
-for (const colorScheme of ["light", "dark"] as const)
-  test.describe(`accessibility, ${colorScheme}`, () => {
-    test.use({ colorScheme });
-
-    test.beforeEach(async ({ page }) => {
-      test.slow();
-      await signIn(page, "process owner");
-    });
-
-    for (const list of CHECKED[colorScheme])
-      test(`the list of ${list}, a record and its form have no findings`, async ({ page }) => {
-        await page.goto(`/carriers/${list}`);
-        await expectNoAxeFindings(page);
-        await page.locator("tbody").getByRole("link").first().click();
-        await expect(page.getByRole("heading", { level: 2, name: "Properties" })).toBeVisible();
-        await expectNoAxeFindings(page);
-        await page.getByRole("link", { name: "Change" }).click();
-        await expect(page.getByRole("button", { name: /^Save/ })).toBeVisible();
-        await expectNoAxeFindings(page);
-      });
-
-    test("the limits have no findings", async ({ page }) => {
-      for (const address of ["/carriers/limits", "/carriers/limits?rule=1"]) {
-        await page.goto(address);
-        await expectNoAxeFindings(page);
-      }
-    });
+test.describe("accessibility", () => {
+  test.beforeEach(async ({ page }) => {
+    test.slow();
+    await signIn(page, "process owner");
   });
+
+  for (const list of LISTS)
+    test(`the list of ${list}, a record and its form have no findings`, async ({ page }) => {
+      await page.goto(`/carriers/${list}`);
+      await expectNoAxeFindingsInBothThemes(page);
+      await page.locator("tbody").getByRole("link").first().click();
+      await expect(page.getByRole("heading", { level: 2, name: "Properties" })).toBeVisible();
+      await expectNoAxeFindingsInBothThemes(page);
+      await page.getByRole("link", { name: "Change" }).click();
+      await expect(page.getByRole("button", { name: /^Save/ })).toBeVisible();
+      await expectNoAxeFindingsInBothThemes(page);
+    });
+
+  test("the limits have no findings", async ({ page }) => {
+    for (const address of ["/carriers/limits", "/carriers/limits?rule=1"]) {
+      await page.goto(address);
+      await expectNoAxeFindingsInBothThemes(page);
+    }
+  });
+});

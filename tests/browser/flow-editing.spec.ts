@@ -1,6 +1,6 @@
 import type { Page } from "@playwright/test";
 import { ownFlow, press, steps } from "./flow-pages.ts";
-import { expect, expectNoAxeFindings, signIn, test } from "./support.ts";
+import { expect, expectNoAxeFindings, expectNoAxeFindingsInBothThemes, signIn, test } from "./support.ts";
 
 const titles = (page: Page) => steps(page).locator("tbody th[scope=row] > a").allTextContents();
 const firstThree = (page: Page) => titles(page).then((all) => all.slice(0, 3));
@@ -208,25 +208,20 @@ test("a technician reads the library and is offered nothing to change in it", as
   expect((await page.request.get("/flows/library/steps/new")).status()).toBe(403);
 });
 
-for (const colorScheme of ["light", "dark"] as const)
-  test.describe(`axe, ${colorScheme}`, () => {
-    test.use({ colorScheme });
-
-    test("finds nothing where flows are tried and kept", async ({ page }) => {
-      test.slow();
-      await signIn(page, "engineer");
-      await ownFlow(page);
-      await page.getByText("What if").click();
-      await page.getByLabel("Value", { exact: true }).fill("40 um");
-      await expect(page.getByRole("heading", { name: "With the changes", exact: true })).toBeVisible();
-      await expectNoAxeFindings(page);
-      for (const place of ["/flows/library/flows", "/flows/library/steps", "/flows/library/steps/new", "/flows/new"]) {
-        await page.goto(place);
-        await expectNoAxeFindings(page);
-      }
-      await page.goto("/flows/library/flows");
-      await page.getByRole("link", { name: "Tape flow to 100 µm, 200 mm" }).click();
-      await expect(page.getByRole("table", { name: "Steps of the template" })).toBeVisible();
-      await expectNoAxeFindings(page);
-    });
-  });
+test("axe finds nothing where flows are tried and kept", async ({ page }) => {
+  test.slow();
+  await signIn(page, "engineer");
+  await ownFlow(page);
+  await page.getByText("What if").click();
+  await page.getByLabel("Value", { exact: true }).fill("40 um");
+  await expect(page.getByRole("heading", { name: "With the changes", exact: true })).toBeVisible();
+  await expectNoAxeFindingsInBothThemes(page);
+  for (const place of ["/flows/library/flows", "/flows/library/steps", "/flows/library/steps/new", "/flows/new"]) {
+    await page.goto(place);
+    await expectNoAxeFindingsInBothThemes(page);
+  }
+  await page.goto("/flows/library/flows");
+  await page.getByRole("link", { name: "Tape flow to 100 µm, 200 mm" }).click();
+  await expect(page.getByRole("table", { name: "Steps of the template" })).toBeVisible();
+  await expectNoAxeFindingsInBothThemes(page);
+});

@@ -1,6 +1,6 @@
 import type { Page } from "@playwright/test";
 import { assess, LIST, ownFlow, press, stackId, steps, TERN } from "./flow-pages.ts";
-import { expect, expectNoAxeFindings, signIn, signInAtToday, test } from "./support.ts";
+import { expect, expectNoAxeFindingsInBothThemes, signIn, signInAtToday, test } from "./support.ts";
 
 test.describe("roles", () => {
   test.use({ refusals: true });
@@ -64,42 +64,41 @@ test.describe("roles", () => {
   });
 });
 
-for (const colorScheme of ["light", "dark"] as const)
-  test.describe(`axe, ${colorScheme}`, () => {
-    test.use({ colorScheme, refusals: true });
+test.describe("axe", () => {
+  test.use({ refusals: true });
 
-    test("finds nothing on any page of the flows", async ({ page }) => {
-      test.slow();
-      await signIn(page, "engineer");
-      const stack = await stackId(page, "Petrel P-3, back-side metal");
-      const path = await ownFlow(page);
-      await expectNoAxeFindings(page);
-      await page.getByRole("button", { name: /^Remove step 2,/ }).click();
-      await expectNoAxeFindings(page);
-      await assess(page);
-      for (const place of [
-        path,
-        "/flows",
-        "/flows?q=parsecs",
-        "/flows/new",
-        `/flows/new?stack=${stack}`,
-        `${path}/edit`,
-      ]) {
-        await page.goto(place);
-        await expectNoAxeFindings(page);
-      }
-      await page.getByRole("link", { name: "Flows", exact: true }).first().click();
-      await page.goto(path);
-      await page.getByRole("link", { name: "Plate redistribution copper, 5 µm, 35 %", exact: true }).click();
-      await expectNoAxeFindings(page);
-      await page.getByLabel("Kind of step").selectOption("bond");
-      await page.getByLabel("Peak temperature").fill("hot");
-      await press(page, "Save step");
-      await expect(page.getByRole("alert")).toBeVisible();
-      await expectNoAxeFindings(page);
-      await page.setViewportSize({ width: 390, height: 844 });
-      await page.goto(path);
-      await page.getByLabel("Change step 2", { exact: true }).click();
-      await expectNoAxeFindings(page);
-    });
+  test("finds nothing on any page of the flows", async ({ page }) => {
+    test.slow();
+    await signIn(page, "engineer");
+    const stack = await stackId(page, "Petrel P-3, back-side metal");
+    const path = await ownFlow(page);
+    await expectNoAxeFindingsInBothThemes(page);
+    await page.getByRole("button", { name: /^Remove step 2,/ }).click();
+    await expectNoAxeFindingsInBothThemes(page);
+    await assess(page);
+    for (const place of [
+      path,
+      "/flows",
+      "/flows?q=parsecs",
+      "/flows/new",
+      `/flows/new?stack=${stack}`,
+      `${path}/edit`,
+    ]) {
+      await page.goto(place);
+      await expectNoAxeFindingsInBothThemes(page);
+    }
+    await page.getByRole("link", { name: "Flows", exact: true }).first().click();
+    await page.goto(path);
+    await page.getByRole("link", { name: "Plate redistribution copper, 5 µm, 35 %", exact: true }).click();
+    await expectNoAxeFindingsInBothThemes(page);
+    await page.getByLabel("Kind of step").selectOption("bond");
+    await page.getByLabel("Peak temperature").fill("hot");
+    await press(page, "Save step");
+    await expect(page.getByRole("alert")).toBeVisible();
+    await expectNoAxeFindingsInBothThemes(page);
+    await page.setViewportSize({ width: 390, height: 844 });
+    await page.goto(path);
+    await page.getByLabel("Change step 2", { exact: true }).click();
+    await expectNoAxeFindingsInBothThemes(page);
   });
+});

@@ -49,13 +49,27 @@ export async function scriptsAtWork(element: Locator): Promise<void> {
     .toBe(true);
 }
 
-/** axe's findings on the page as it stands, none of which are expected. */
-export async function expectNoAxeFindings(page: Page): Promise<void> {
-  const { violations } = await new AxeBuilder({ page })
-    .withTags(["wcag2a", "wcag2aa", "wcag21aa", "wcag22aa"])
-    .analyze();
+/** The rules that a change of theme alone can break. */
+const OF_COLOURS = ["color-contrast", "link-in-text-block"];
+
+async function expectNothingFound(axe: AxeBuilder): Promise<void> {
+  // No page has frames; the way for them opens a second page each time.
+  const { violations } = await axe.setLegacyMode().analyze();
   const found = violations.map(({ id, nodes }) => `${id}: ${nodes.map(({ target }) => target.join(" ")).join(", ")}`);
   expect(found).toEqual([]);
+}
+
+/** axe's findings on the page as it stands, none of which are expected. */
+export async function expectNoAxeFindings(page: Page): Promise<void> {
+  await expectNothingFound(new AxeBuilder({ page }).withTags(["wcag2a", "wcag2aa", "wcag21aa", "wcag22aa"]));
+}
+
+/** The same, and once more in the dark for what depends on colours. Ends in the light. */
+export async function expectNoAxeFindingsInBothThemes(page: Page): Promise<void> {
+  await expectNoAxeFindings(page);
+  await page.emulateMedia({ colorScheme: "dark" });
+  await expectNothingFound(new AxeBuilder({ page }).withRules(OF_COLOURS));
+  await page.emulateMedia({ colorScheme: "light" });
 }
 
 /** Has `goto` and `reload` wait until the scripts of the page answer, unless they are told what to wait for. */

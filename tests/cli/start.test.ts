@@ -59,7 +59,6 @@ describe("npm start", { timeout: 60_000 }, () => {
 
   it.each([
     ["the command", ["start.mjs"]],
-    ["the server", ["build/server"]],
     ["the database server", [".planeward/postgres"]],
     ["both servers", ["build/server", ".planeward/postgres"]],
     ["the command and its guard", ["guard.mjs", "start.mjs"]],
@@ -76,6 +75,25 @@ describe("npm start", { timeout: 60_000 }, () => {
     expect(next.runs).toBe(runs + 1);
     next.command.child.kill("SIGTERM");
     expect(await next.command.ends()).toBe(0);
+    expect(project.processes()).toEqual([]);
+  });
+
+  it("serves again at the same place when the server is killed, and stops in order after it", async () => {
+    const { command } = await serve();
+    const server = () => project.processes("build/server").map(({ pid }) => pid);
+    const answers = () =>
+      fetch(`http://127.0.0.1:${port}/`).then(
+        ({ status }) => status,
+        () => null,
+      );
+    for (const _round of [1, 2]) {
+      const [first] = server();
+      project.kill("build/server");
+      await expect.poll(() => server().filter((pid) => pid !== first), { timeout: 30_000 }).toHaveLength(1);
+      await expect.poll(answers, { timeout: 30_000 }).toBe(200);
+    }
+    command.child.kill("SIGTERM");
+    expect(await command.ends()).toBe(0);
     expect(project.processes()).toEqual([]);
   });
 

@@ -138,6 +138,44 @@ describe("what the floor says", () => {
     expect(Date.parse(first?.at ?? "")).toBeLessThanOrEqual(Date.now());
   });
 
+  test("puts a bow beside the prediction where the two are alike, once, the other side up with its sign turned", async () => {
+    const { stepMeasurements } = await import("#app/services/predictions/step-measurements.server.ts");
+    const [{ assessment_id: assessment = "" } = {}] = await asOwner<{ assessment_id: string }>(
+      database,
+      "select assessment_id from sheet_revision where id = ?",
+      [revision],
+    );
+    const [first] = (await stepMeasurements(engineer, assessment)).steps;
+    const step = first?.step ?? 0;
+    const bow = {
+      kind: "measured" as const,
+      what: "bow",
+      value: 41e-6,
+      uncertainty: 4e-6,
+      wafer: "W03",
+      on: "three pins",
+      sideUp: "back side",
+      gravity: "taken out",
+      remark: "",
+    };
+    const count = async () => (await stepMeasurements(engineer, assessment)).rows.length;
+    expect(await say(technician, entry({ kind: "started" }, step))).toBe("stored");
+    expect(await say(technician, entry(bow, step))).toBe("stored");
+    expect(await count(), "in the middle of a step").toBe(0);
+    expect(await say(technician, entry({ kind: "done", count: null }, step))).toBe("stored");
+    for (const unlike of [{ what: "warp" }, { gravity: "left in" }, { gravity: "not known" }, { on: "film frame" }])
+      expect(await say(technician, entry({ ...bow, ...unlike }, step))).toBe("stored");
+    expect(await count()).toBe(0);
+    const form = entry(bow, step);
+    expect(await say(technician, form)).toBe("stored");
+    expect(await say(technician, form)).toBe("stored");
+    const { rows } = await stepMeasurements(engineer, assessment);
+    expect(rows).toMatchObject([{ step, lot: "T-0420", wafer: "W03", stated: true, instrument: "floor, three pins" }]);
+    expect(rows[0]?.bow).toBe(-41e-6);
+    expect(rows[0]?.standardUncertainty).toBeCloseTo(2e-6, 12);
+    expect(rows[0]?.predicted).toBe(first?.predicted?.bow);
+  });
+
   test("is refused of a sheet that the lot was never on", async () => {
     expect(await say(technician, entry({ kind: "observed", text: "Dust", count: null }, null, randomUUID()))).toContain(
       "never on this sheet",

@@ -127,7 +127,13 @@ function DeedFields({ deed, fields }: { deed: Deed; fields: Fields }): ReactNode
             blank="Choose what held it"
           />
           <ChoiceField field={fields.sideUp} label="Side up" choices={sameWords(MEASURED_SIDES)} />
-          <ChoiceField field={fields.gravity} label="Its own weight was" choices={sameWords(GRAVITY)} blank="Choose" />
+          <ChoiceField
+            field={fields.gravity}
+            label="Its own weight was"
+            choices={sameWords(GRAVITY)}
+            blank="Choose"
+            hint="A bow with the weight taken out, entered when its step is done, is held against the prediction."
+          />
           <NoteField field={fields.remark} label="Remark" rows={2} hint="May stay empty." />
         </>
       );

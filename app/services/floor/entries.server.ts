@@ -7,6 +7,7 @@ import type { FloorContent, FloorEntryForm } from "#app/schemas/floor-entry.ts";
 import { inScope, type ActorScope } from "#app/server/scope.server.ts";
 import { lockSheetOf } from "../sheets/revision.server.ts";
 import { blocksOf } from "./blocks.server.ts";
+import { compareReading } from "./compare-reading.server.ts";
 import { findFloorLot, pinsOf, pinView, type Pin } from "./lot-sheet.server.ts";
 import { sheetParts } from "./sheet-steps.server.ts";
 
@@ -66,6 +67,8 @@ export async function enter(scope: ActorScope, lotId: string | undefined, form: 
     const sentence = await whyNot(em, scope, lot, asked);
     if (sentence !== null) return refused(sentence);
     const now = new Date();
+    // A clock that runs ahead would make every other one wrong.
+    const when = at === null || at > now ? now : at;
     em.create(FloorEntry, {
       id,
       program: lot.program.id,
@@ -75,11 +78,18 @@ export async function enter(scope: ActorScope, lotId: string | undefined, form: 
       step,
       kind: content.kind,
       content,
-      // A clock that runs ahead would make every other one wrong.
-      at: at === null || at > now ? now : at,
+      at: when,
       receivedAt: now,
       createdBy: scope.actor.id,
     });
+    if (content.kind === "measured" && step !== null) {
+      const { done } = await progressOf(em, lot.id, pin, leg, steps);
+      const assessment = { id: pin.revision.assessment.id, result: parts.result };
+      const isDone = done.includes(step);
+      const by = scope.actor.id;
+      const program = lot.program.id;
+      compareReading(em, { id, program, lot: lot.name, assessment, leg, step, isDone, content, at: when, by });
+    }
     await em.flush();
     return { outcome: "stored" };
   });

@@ -3,8 +3,6 @@ import { UniqueConstraintViolationException, type EntityManager, type Loaded } f
 import { StepMeasurement } from "#app/db/entities/step-measurement.ts";
 import { WaferMeasurement } from "#app/db/entities/wafer-measurement.ts";
 import { measurableSteps, predictedBow } from "#app/lib/predicted-bow.ts";
-import { COVERAGE } from "#app/lib/scan-answer.ts";
-import { USUAL_BOW_UNCERTAINTY } from "#app/lib/usual-bow.ts";
 import { mayInProgram } from "#app/policies/permissions.ts";
 import type { StepMeasurementValues } from "#app/schemas/step-measurement-form.ts";
 import type { StepMeasurementRow, StepMeasurements } from "#app/schemas/step-measurement.ts";
@@ -14,6 +12,7 @@ import { findAssessment } from "../assessments/assessments.server.ts";
 import { requireInProgram } from "../permission.server.ts";
 import { idFrom } from "../uuid.server.ts";
 import { measuredBows, summaryChoices, type MeasuredBow } from "./measured-bows.server.ts";
+import { standardUncertaintyOf } from "./stated-uncertainty.ts";
 
 /** What was measured after the steps of an assessment, and what can be recorded; refused to whom the program's work is not open. */
 export async function stepMeasurements(scope: ActorScope, assessmentId: string | undefined): Promise<StepMeasurements> {
@@ -117,7 +116,7 @@ function record(scope: ActorScope, assessmentId: string | undefined, values: Ste
           wafer: bow.wafer,
           measurement: bow.measurement ? em.getReference(WaferMeasurement, bow.measurement) : null,
           bow: bow.bow,
-          ...uncertaintyOf(values),
+          ...standardUncertaintyOf(values.uncertainty),
           predicted: predicted.bow,
           predictedUncertainty: predicted.standardUncertainty,
           instrument: values.instrument,
@@ -137,11 +136,6 @@ function record(scope: ActorScope, assessmentId: string | undefined, values: Ste
     return { outcome: "stored", count: measured.bows.length };
   });
 }
-
-const uncertaintyOf = ({ uncertainty }: StepMeasurementValues) =>
-  uncertainty === null
-    ? { standardUncertainty: USUAL_BOW_UNCERTAINTY, stated: false }
-    : { standardUncertainty: uncertainty / COVERAGE, stated: true };
 
 /** Whether the same row of a summary, or the same wafer of the same lot and day, stands after this step. */
 async function already(em: EntityManager, assessment: string, step: number, bow: MeasuredBow): Promise<boolean> {
