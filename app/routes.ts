@@ -5,6 +5,9 @@ export default [
   route("readyz", "routes/readyz.ts"),
   layout("routes/_public/layout.tsx", [
     route("sign-in", "routes/_public/sign-in.tsx"),
+    route("sign-in/code", "routes/_auth/code.tsx"),
+    route("sign-in/set-up", "routes/_auth/set-up-codes.tsx"),
+    route("confirm-address/:secret", "routes/_public/confirm-address.tsx"),
     route("forgotten", "routes/_public/forgotten.tsx"),
     route("set-password/:secret", "routes/_public/set-password.tsx"),
     route("s/:token", "routes/_public/sheet-status.tsx"),
@@ -153,6 +156,7 @@ export default [
       route(":personId", "routes/_app/people/person.tsx"),
     ]),
     route("account", "routes/_app/account.tsx"),
+    route("account/codes", "routes/_app/account-codes.tsx"),
     route("settings", "routes/_app/settings.tsx"),
     route("api", "routes/_app/api.tsx"),
     route("tokens", "routes/_app/tokens.tsx"),

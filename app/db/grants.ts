@@ -42,6 +42,7 @@ const READ_AND_CHANGE = ["site_setting"];
 const READ_AND_WRITE = [
   "person",
   "credential",
+  "one_time_codes",
   "session",
   "program",
   "membership",

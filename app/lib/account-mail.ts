@@ -9,6 +9,11 @@ export const ACCOUNT_MAIL_WORDS = {
   "address change": "A new address is to be confirmed",
   "address changed": "The address was changed",
   "password changed": "The password was changed",
+  "codes on": "One-time codes were turned on",
+  "codes off": "One-time codes were turned off",
+  "codes reset": "One-time codes were reset",
+  "recovery codes made": "New recovery codes were made",
+  "recovery code used": "A recovery code was used",
 } as const;
 export type AccountMail = keyof typeof ACCOUNT_MAIL_WORDS;
 

@@ -1,5 +1,11 @@
 import type { MiddlewareFunction } from "react-router";
-import { actorContext, bearerContext, requestIdContext, sessionContext } from "#app/server/contexts.server.ts";
+import {
+  actorContext,
+  bearerContext,
+  heldContext,
+  requestIdContext,
+  sessionContext,
+} from "#app/server/contexts.server.ts";
 import { clearedSessionCookie, sessionCookie, tokenOf } from "#app/server/session-cookie.server.ts";
 import { resumeSession } from "#app/services/sessions.server.ts";
 
@@ -9,7 +15,8 @@ export const session: MiddlewareFunction<Response> = async ({ request, context }
   const token = await tokenOf(request);
   if (!token) return next();
   const resumed = await resumeSession(token, context.get(requestIdContext));
-  if (resumed) {
+  if (resumed?.session.codes === "missing") context.set(heldContext, resumed);
+  else if (resumed) {
     context.set(actorContext, resumed.actor);
     context.set(sessionContext, resumed.session);
   }

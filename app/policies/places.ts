@@ -33,6 +33,12 @@ const WITHIN: (Page & { open: (actor: Actor) => boolean })[] = [
   { name: "Favourites", path: "/favourites", also: "marked, starred", open: seesLibrary },
   { name: "Preferences", path: "/preferences", also: "theme, dark, density, settings", open: () => true },
   { name: "Account", path: "/account", also: "password, sessions, sign out elsewhere", open: () => true },
+  {
+    name: "One-time codes",
+    path: "/account/codes",
+    also: "second factor, two-step sign-in, authenticator app, recovery codes",
+    open: () => true,
+  },
   { name: "E-mail", path: "/preferences/mail", also: "mail, digest, unsubscribe, notifications", open: () => true },
   {
     name: "API tokens",

@@ -6,6 +6,9 @@ export type ProgramRole = (typeof PROGRAM_ROLES)[number];
 export const SITE_ROLES = ["administrator", "shift lead"] as const;
 export type SiteRole = (typeof SITE_ROLES)[number];
 
+/** Any role that a person can hold. */
+export type Role = ProgramRole | SiteRole;
+
 /** What a person is in a program. */
 export interface Membership {
   programId: string;

@@ -1,4 +1,5 @@
 import { z } from "zod";
+import type { ProofAsked } from "./proof.ts";
 import { words } from "./written.ts";
 
 /** What a token may be made for, with the words for it. A person's roles bind it besides. */
@@ -64,6 +65,6 @@ export interface TokensView {
   programs: { id: string; name: string }[];
   /** whether those of everybody are listed */
   ofAll: boolean;
-  /** whether the password is asked for before a token is made */
-  proofAsked: boolean;
+  /** what is asked for before a token is made */
+  proofAsked: ProofAsked;
 }

@@ -1,5 +1,6 @@
 import { z } from "zod";
 import { PROGRAM_ROLES, SITE_ROLES, type ProgramRole, type SiteRole } from "#app/policies/roles.ts";
+import { proofFields } from "./proof.ts";
 import { words } from "./written.ts";
 
 /** A choice whose empty value is none. */
@@ -16,18 +17,20 @@ const roles = {
     .array(z.object({ program: z.uuid(), role: orNone(PROGRAM_ROLES) }))
     .max(100)
     .default([]),
-  /** the password of who changes it, asked for where the last proof is older than ten minutes */
-  proof: z.string().max(1000).default(""),
+  ...proofFields,
 };
+
+/** An address as it is stored: in small letters. */
+export const emailAddress = z
+  .string("Type the e-mail address.")
+  .trim()
+  .toLowerCase()
+  .max(200)
+  .pipe(z.email("Type a whole e-mail address, such as name@site.example."));
 
 export const inviteSchema = z.object({
   name: words("Type the name, as colleagues know it.", 100),
-  email: z
-    .string("Type the e-mail address.")
-    .trim()
-    .toLowerCase()
-    .max(200)
-    .pipe(z.email("Type a whole e-mail address, such as name@site.example.")),
+  email: emailAddress,
   ...roles,
 });
 export type InviteValues = z.output<typeof inviteSchema>;

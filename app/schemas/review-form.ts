@@ -1,4 +1,5 @@
 import { z } from "zod";
+import { proofFields } from "./proof.ts";
 import { lastDay, words, YEAR } from "./written.ts";
 
 const STEP = "Choose a step of the flow.";
@@ -38,8 +39,7 @@ export const reviewFormSchema = z.discriminatedUnion("intent", [
     intent: z.literal("release"),
     assumptions: z.literal("checked", "Tick that you have been through the assumptions."),
     remark: z.string().trim().max(1000, "Keep it under 1000 characters.").default(""),
-    /** the password, asked for where the last proof is older than ten minutes */
-    proof: z.string().max(1000).default(""),
+    ...proofFields,
   }),
 ]);
 export type ReviewForm = z.output<typeof reviewFormSchema>;

@@ -2,6 +2,7 @@ import type { AssumedInput } from "#app/engine/flow/assess.ts";
 import type { BlockingFinding } from "#app/lib/blocking-findings.ts";
 import type { SinceRelease } from "#app/lib/since-release.ts";
 import type { Obstacle } from "#app/policies/release.ts";
+import type { ProofAsked } from "./proof.ts";
 import type { RevisionState } from "./sheet-revision.ts";
 
 export interface DeviationView {
@@ -60,6 +61,6 @@ export interface ReviewView {
   /** why no review can be asked for now; null when it can */
   notAsked: string | null;
   may: { ask: boolean; comment: boolean; deviate: boolean; return: boolean; release: boolean };
-  /** the reader has to type the password to release */
-  proofAsked: boolean;
+  /** what the reader has to prove who they are with to release */
+  proofAsked: ProofAsked;
 }

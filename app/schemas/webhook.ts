@@ -1,3 +1,4 @@
+import type { ProofAsked } from "./proof.ts";
 import { z } from "zod";
 import type { ProgramPermission } from "#app/policies/permissions.ts";
 import { words } from "./written.ts";
@@ -96,7 +97,7 @@ export interface WebhookRow {
 export interface WebhooksView {
   rows: WebhookRow[];
   programs: { id: string; name: string }[];
-  proofAsked: boolean;
+  proofAsked: ProofAsked;
 }
 
 export interface DeliveryRow {

@@ -8,6 +8,8 @@ export const requestIdContext = createContext<string>("");
 export const nonceContext = createContext<string>("");
 export const sessionContext = createContext<SessionOfScope | null>(null);
 export const actorContext = createContext<Actor | null>(null);
+/** somebody who has to set up one-time codes before anything else: to every page but that one they are nobody */
+export const heldContext = createContext<{ actor: Actor; session: SessionOfScope } | null>(null);
 /** set where a request of the API came with a token; its cookie then counts for nothing */
 export const bearerContext = createContext<TokenBearer | null>(null);
 
@@ -25,4 +27,10 @@ export function scopeOf(context: Readonly<RouterContextProvider>): ActorScope {
     requestId: context.get(requestIdContext),
     ...(onlyProgram && { onlyProgram }),
   };
+}
+
+/** The scope of who has to set up one-time codes before anything else; null for everybody else. */
+export function heldScopeOf(context: Readonly<RouterContextProvider>): ActorScope | null {
+  const held = context.get(heldContext);
+  return held && { ...held, requestId: context.get(requestIdContext) };
 }

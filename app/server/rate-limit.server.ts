@@ -12,6 +12,8 @@ const LIMITS = {
   account: { points: 50, duration: 60 * MINUTE },
   /** guesses from one address at any account; many people may share one */
   address: { points: 200, duration: 15 * MINUTE },
+  /** guesses at the one-time codes of one account from anywhere; only who knows its password gets that far */
+  codes: { points: 15, duration: 60 * MINUTE },
   /** links to set a password, mailed to one account */
   "links by mail": { points: 3, duration: 60 * MINUTE },
 } as const;

@@ -1,6 +1,7 @@
 import type { EntityManager } from "@mikro-orm/postgresql";
 import { orm } from "#app/db/orm.server.ts";
 import type { Actor } from "#app/policies/roles.ts";
+import type { CodesState } from "#app/policies/codes.ts";
 import { noteScope } from "./audit.server.ts";
 
 /** On whose behalf work on the database is done, and in which request. */
@@ -18,6 +19,7 @@ export interface SessionOfScope {
   id: string;
   /** when the person last proved who they are, ms since 1970 */
   provenAt: number;
+  codes: CodesState;
 }
 
 /** The scope of a signed-in person's request. */

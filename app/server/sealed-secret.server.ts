@@ -1,16 +1,11 @@
-import { createCipheriv, createDecipheriv, hkdfSync, randomBytes } from "node:crypto";
-import { environment } from "./environment.server.ts";
+import { createCipheriv, createDecipheriv, randomBytes } from "node:crypto";
+import { keyFor } from "./secret-key.server.ts";
 
 /** AES-256 in Galois/counter mode (NIST SP 800-38D), with a nonce of 96 bits made at random for each text. */
 const CIPHER = "aes-256-gcm";
 const NONCE = 12;
 /** Of the whole form, so that another one can be told from it. */
 const FORM = "s1";
-
-/** A key for one purpose (RFC 5869): what is sealed for one is nothing to another. */
-function keyFor(purpose: string): Buffer {
-  return Buffer.from(hkdfSync("sha256", environment.SECRET_KEY, "planeward", purpose, 32));
-}
 
 /**
  * A secret as it may be stored where it has to be read again.
@@ -25,15 +20,15 @@ export function seal(text: string, purpose: string): string {
     .join(".");
 }
 
-/**
- * The secret again.
- * @throws for a text that was sealed for another purpose, under another secret of the environment, or was changed since
- */
-export function unseal(sealed: string, purpose: string): string {
+/** The secret again; null for a text that was sealed for another purpose, under another key of the environment, or was changed since. */
+export function unseal(sealed: string, purpose: string): string | null {
   const [form, nonce, tag, text] = sealed.split(".");
-  if (form !== FORM || nonce === undefined || tag === undefined || text === undefined)
-    throw new Error("This is no sealed secret.");
-  const decipher = createDecipheriv(CIPHER, keyFor(purpose), Buffer.from(nonce, "base64url"), { authTagLength: 16 });
-  decipher.setAuthTag(Buffer.from(tag, "base64url"));
-  return Buffer.concat([decipher.update(Buffer.from(text, "base64url")), decipher.final()]).toString("utf8");
+  if (form !== FORM || nonce === undefined || tag === undefined || text === undefined) return null;
+  try {
+    const decipher = createDecipheriv(CIPHER, keyFor(purpose), Buffer.from(nonce, "base64url"), { authTagLength: 16 });
+    decipher.setAuthTag(Buffer.from(tag, "base64url"));
+    return Buffer.concat([decipher.update(Buffer.from(text, "base64url")), decipher.final()]).toString("utf8");
+  } catch {
+    return null;
+  }
 }

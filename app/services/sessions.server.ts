@@ -5,6 +5,7 @@ import type { Actor } from "#app/policies/roles.ts";
 import { inScope, type SessionOfScope } from "#app/server/scope.server.ts";
 import { secretDigest } from "#app/server/secret-digest.server.ts";
 import { actorOf } from "./actor.server.ts";
+import { codesStateOf } from "./codes/codes-state.server.ts";
 
 const MINUTE = 60_000;
 /** A session ends after this long without use, and after this long whatever happens. */
@@ -77,7 +78,8 @@ export async function resumeSession(
     if (session.lastSeenAt.getTime() + NOTE_USE_AFTER <= now) session.lastSeenAt = new Date(now);
     const actor = await actorOf(em, session.person);
     await em.flush();
-    return { actor, session: { id: session.id, provenAt: session.provenAt.getTime() }, renewed };
+    const codes = await codesStateOf(em, actor);
+    return { actor, session: { id: session.id, provenAt: session.provenAt.getTime(), codes }, renewed };
   });
 }
 

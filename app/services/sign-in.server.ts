@@ -2,6 +2,7 @@ import { randomUUID } from "node:crypto";
 import { hash, verify } from "@node-rs/argon2";
 import { AuditEvent } from "#app/db/entities/audit-event.ts";
 import { Credential } from "#app/db/entities/credential.ts";
+import { OneTimeCodes } from "#app/db/entities/one-time-codes.ts";
 import { Person } from "#app/db/entities/person.ts";
 import { inScope } from "#app/server/scope.server.ts";
 
@@ -14,15 +15,19 @@ export async function personWithPassword(email: string, password: string, reques
     const person = await em.findOne(Person, { email: email.trim().toLowerCase(), active: true });
     if (!person) return null;
     const credential = await em.findOne(Credential, { person: person.id });
-    return credential ? { personId: person.id, passwordHash: credential.passwordHash } : null;
+    if (!credential) return null;
+    const hasCodes = (await em.count(OneTimeCodes, { person: person.id, confirmedAt: { $ne: null } })) > 0;
+    return { personId: person.id, passwordHash: credential.passwordHash, hasCodes };
   });
   const matches = await verify(found?.passwordHash ?? (await nobodysHash), password);
   const personId = found && matches ? found.personId : null;
-  await noteAttempt(found?.personId ?? null, personId !== null, requestId);
+  // Who has one-time codes is signed in by the code alone.
+  if (!personId || !found?.hasCodes) await noteAttempt(found?.personId ?? null, personId !== null, requestId);
   return personId;
 }
 
-async function noteAttempt(personId: string | null, succeeded: boolean, requestId: string): Promise<void> {
+/** Notes in the trail that somebody was signed in, or was refused. */
+export async function noteAttempt(personId: string | null, succeeded: boolean, requestId: string): Promise<void> {
   await inScope({ personId, atTheDoor: true, requestId }, async (em) => {
     em.create(AuditEvent, {
       id: randomUUID(),

@@ -45,7 +45,7 @@ export async function saveSiteSettings(
     if (row.version !== version) {
       const { updatedBy, updatedAt } = stampOf(row);
       const at = updatedAt.slice(0, 16).replace("T", " ");
-      const reason = `${updatedBy} set the paper to ${PAPERS[row.paper].name} at ${at} UTC, after you had opened this page. Save again to put yours in its place.`;
+      const reason = `${updatedBy} saved these settings, with ${PAPERS[row.paper].name} as the paper, at ${at} UTC, after you had opened this page. Save again to put yours in its place.`;
       return { outcome: "refused", reason, version: row.version };
     }
     row.paper = paper;

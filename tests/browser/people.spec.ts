@@ -1,27 +1,7 @@
-import { readKept } from "#app/integrations/mail/fake/kept-mail.ts";
+import { mailedLink } from "./mailed-link.ts";
 import { accountOf, expect, expectNoAxeFindings, signIn, test } from "./support.ts";
 
 const PHONE = { width: 390, height: 844 };
-
-/** The link of the newest mail to an address whose subject says so. */
-async function linkTo(address: string, subject: RegExp): Promise<string> {
-  let found = "";
-  await expect
-    .poll(
-      async () => {
-        const mails = await readKept(process.env["DEMO_MAIL_FOLDER"] ?? "");
-        const mine = mails.filter((mail) => mail.to.includes(address) && subject.test(mail.subject));
-        const links = mine.flatMap(({ text }) => /\/set-password\/[\w-]+/.exec(text)?.[0] ?? []);
-        found = links.find((link) => !known.has(link)) ?? "";
-        return found;
-      },
-      { timeout: 60_000 },
-    )
-    .not.toBe("");
-  known.add(found);
-  return found;
-}
-const known = new Set<string>();
 
 test.describe("people", () => {
   test.use({ refusals: true });
@@ -51,7 +31,7 @@ test.describe("people", () => {
     await expectNoAxeFindings(page);
 
     const theirs = await (await browser.newContext({ viewport: PHONE })).newPage();
-    const link = await linkTo(address, /./);
+    const link = await mailedLink(address, "set-password");
     await theirs.goto(link);
     await theirs.goto(link);
     await expect(theirs.getByRole("heading", { level: 1 })).toHaveText("Welcome: set your password");

@@ -409,7 +409,6 @@ test.describe("without scripts", () => {
   test.use({ javaScriptEnabled: false, refusals: true });
 
   test("a stack is built, worked out, saved and removed", async ({ page }) => {
-    // Signing in shows Today by a redirect, which needs no script either.
     await signIn(page, "engineer");
     const name = nameFor("plain");
     await page.goto("/stacks/new");
@@ -431,10 +430,8 @@ test.describe("without scripts", () => {
     await expect(field(page, "layers[1].thickness.value")).toHaveValue("7 um");
     await save(page).click();
     await expect(page).toHaveURL(UUID);
-    await expect(page.locator("details[id^=layer-] > summary")).toContainText([
-      "Plated copper A",
-      "Polymer dielectric A",
-    ]);
+    const films = ["Plated copper A", "Polymer dielectric A"];
+    await expect(page.locator("details[id^=layer-] > summary")).toContainText(films);
     await field(page, "siliconThickness.value").fill("");
     await save(page).click();
     await expect(page.getByRole("alert")).toContainText("One field needs a look");

@@ -19,7 +19,7 @@ export async function scopeOfPerson(database: TestDatabase, account: string): Pr
   );
   return {
     actor: { id: person.id, name: person.name, email: person.email, siteRole: person.site_role, memberships },
-    session: { id: randomUUID(), provenAt: Date.now() },
+    session: { id: randomUUID(), provenAt: Date.now(), codes: "off" },
     requestId: "test",
   };
 }

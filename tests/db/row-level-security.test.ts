@@ -109,6 +109,7 @@ describe("every table", () => {
     "person",
     "credential",
     "session",
+    "one_time_codes",
     "person_token",
     "membership",
     "program",

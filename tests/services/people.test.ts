@@ -138,7 +138,7 @@ test("everybody else is refused, by the services and by the database", async () 
   await inScope(owner, (em) => em.execute("update person set active = false where id = ?", [guest]));
   const [row] = await asOwner<{ active: boolean }>(database, "select active from person where id = ?", [guest]);
   expect(row?.active).toBe(true);
-  const stale = { ...administrator, session: { id: guest, provenAt: Date.now() - 11 * 60_000 } };
+  const stale = { ...administrator, session: { id: guest, provenAt: Date.now() - 11 * 60_000, codes: "off" as const } };
   await expect(
     invitePerson(stale, { name: "X", email: "x@kestrel-ridge.example", siteRole: null, memberships: [] }),
   ).rejects.toMatchObject(status(403));

@@ -25,8 +25,10 @@ beforeAll(async () => {
 /** The same session as if its last proof were as old. */
 const provenBefore = (milliseconds: number): ActorScope => ({
   ...owner,
-  session: { id: owner.session?.id ?? "", provenAt: Date.now() - milliseconds },
+  session: { id: owner.session?.id ?? "", provenAt: Date.now() - milliseconds, codes: "off" },
 });
+
+const given = (proof: string) => ({ proof, proofCode: "" });
 
 test("signing in is a proof for ten minutes, and without a session there is none", async () => {
   const { requireRecentProof } = await proofs();
@@ -40,10 +42,13 @@ test("afterwards the password proves it, and is noted in the session; a wrong on
   const { proveAgain, requireRecentProof } = await proofs();
   const old = provenBefore(20 * MINUTE);
   await asOwner(database, "update session set proven_at = now() - interval '20 minutes'");
-  expect((await proveAgain(old, "")).fault).toMatch(/^Type your password/);
-  expect((await proveAgain(old, "not it")).fault).toMatch(/^This is not your password/);
-  const proven = await proveAgain(old, password);
-  if (proven.scope === null) throw new Error(proven.fault);
+  expect((await proveAgain(old, given(""))).fault?.sentence).toMatch(/^Type your password/);
+  expect((await proveAgain(old, given("not it"))).fault).toMatchObject({
+    field: "proof",
+    sentence: expect.stringMatching(/^This is not your password/),
+  });
+  const proven = await proveAgain(old, given(password));
+  if (proven.scope === null) throw new Error(proven.fault.sentence);
   requireRecentProof(proven.scope);
   const [row] = await asOwner<{ lately: boolean }>(
     database,
@@ -55,8 +60,8 @@ test("afterwards the password proves it, and is noted in the session; a wrong on
 test("guesses are limited, and the right password does not count then either", async () => {
   const { proveAgain } = await proofs();
   const old = provenBefore(20 * MINUTE);
-  for (let times = 0; times < 12; times++) await proveAgain(old, "not it");
-  expect((await proveAgain(old, password)).fault).toMatch(/^Too many attempts/);
+  for (let times = 0; times < 12; times++) await proveAgain(old, given("not it"));
+  expect((await proveAgain(old, given(password))).fault?.sentence).toMatch(/^Too many attempts/);
 });
 
 test("a sheet is released by nobody whose last proof is older", async () => {

@@ -65,7 +65,9 @@ test("of two who save, the second is told who was first, and may then save over 
   const second = await saveSiteSettings(administrator, { paper: "a4", version: stamp.version });
   if (second.outcome !== "refused") throw new Error("saved over");
   expect(second.reason).toMatch(
-    new RegExp(`^${administrator.actor.name} set the paper to Letter at [-\\d]+ [:\\d]+ UTC, after you had opened`),
+    new RegExp(
+      `^${administrator.actor.name} saved these settings, with Letter as the paper, at [-\\d]+ [:\\d]+ UTC, after you had opened`,
+    ),
   );
   expect((await siteSettings(administrator)).paper).toBe("letter");
   expect(await saveSiteSettings(administrator, { paper: "a4", version: second.version })).toEqual({ outcome: "saved" });

@@ -380,7 +380,7 @@ describe("by hand", () => {
       for (const table of ["webhook", "webhook_delivery"])
         expect(await inScope(other, (em) => em.execute(`select 1 from ${table}`))).toEqual([]);
     }
-    const old = { ...technician, session: { id: randomUUID(), provenAt: 0 } };
+    const old = { ...technician, session: { codes: "off" as const, id: randomUUID(), provenAt: 0 } };
     await expect(make(old)).rejects.toEqual(status(403));
     await expect(renewSecret(old, id)).rejects.toEqual(status(403));
     expect((await webhooksView(owner)).rows).toMatchObject([{ id, madeBy: technician.actor.name, makerLeft: false }]);

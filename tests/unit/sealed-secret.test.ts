@@ -20,17 +20,17 @@ test("what is sealed is read again for its purpose alone, under the same secret 
   expect(sealed).not.toContain("pwh_");
   expect(unseal(sealed, "webhook 1")).toBe("pwh_µ");
   expect(seal("pwh_µ", "webhook 1")).not.toBe(sealed);
-  expect(() => unseal(sealed, "webhook 2")).toThrow();
+  expect(unseal(sealed, "webhook 2")).toBeNull();
   const parts = sealed.split(".");
   for (const index of [1, 2, 3]) {
     const part = parts[index] ?? "";
     const changed = parts.with(index, `${part.startsWith("A") ? "B" : "A"}${part.slice(1)}`);
-    expect(() => unseal(changed.join("."), "webhook 1"), `part ${index}`).toThrow();
+    expect(unseal(changed.join("."), "webhook 1"), `part ${index}`).toBeNull();
   }
   for (const other of ["", "s1", "s2.a.b.c", parts.with(2, "").join(".")])
-    expect(() => unseal(other, "webhook 1")).toThrow();
+    expect(unseal(other, "webhook 1")).toBeNull();
   const again = await sealing(`${SECRET}0`);
-  expect(() => again.unseal(sealed, "webhook 1")).toThrow();
+  expect(again.unseal(sealed, "webhook 1")).toBeNull();
 });
 
 test("a key that is missing or short stops the start", async () => {

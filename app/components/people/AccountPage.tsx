@@ -1,4 +1,4 @@
-import { Form } from "react-router";
+import { Form, Link } from "react-router";
 import { SubmitButton } from "#app/components/forms/SubmitButton.tsx";
 import { PageHead } from "#app/components/layout/PageHead.tsx";
 import { HungSection } from "#app/components/ui/HungSection.tsx";
@@ -6,10 +6,14 @@ import { Notice } from "#app/components/ui/Notice.tsx";
 import { deviceWords } from "#app/lib/device-words.ts";
 import { minuteOf } from "#app/lib/minute-of.ts";
 import type { OwnSession } from "#app/schemas/own-account.ts";
+import type { ProofAsked } from "#app/schemas/proof.ts";
+import { AddressForm, type AddressAnswer } from "./AddressForm.tsx";
 import { PasswordField } from "./PasswordField.tsx";
 
 const DONE = {
   ended: "That session has ended.",
+  asked: "If the address is free, a mail with a link is on its way there. Nothing changes until the link is used.",
+  address: "Your address is changed. Sign in with the new one from now on.",
   changed: "Your password is changed, and every other session of yours has ended.",
 };
 
@@ -18,16 +22,25 @@ interface Props {
   email: string;
   sessions: readonly OwnSession[];
   hours: { idle: number; absolute: number };
+  /** since when signing in asks for one-time codes; null where it does not */
+  codesSince: string | null;
+  proofAsked: ProofAsked;
   done: keyof typeof DONE | null;
-  faults: { current: string | undefined; password: string | undefined } | undefined;
+  answer: AccountAnswer | undefined;
 }
 
-/** A person's own account: where they are signed in, and their password. */
-export function AccountPage({ name, email, sessions, hours, done, faults }: Props) {
+/** What was wrong in one of the forms. */
+export interface AccountAnswer {
+  password?: { current: string | undefined; password: string | undefined };
+  address?: AddressAnswer;
+}
+
+/** A person's own account: where they are signed in, their password, codes and address. */
+export function AccountPage({ name, email, sessions, hours, codesSince, proofAsked, done, answer }: Props) {
   return (
     <>
       <PageHead title="Account" remark={`${name}, ${email}`} />
-      {done && !faults && <Notice kind="done" title={DONE[done]} />}
+      {done && !answer && <Notice kind="done" title={DONE[done]} />}
       <HungSection title="Signed in">
         <p className="max-w-160 pb-2 text-quiet">
           A session ends {hours.idle}&nbsp;hours after its last use, and {hours.absolute}&nbsp;hours after signing in
@@ -42,10 +55,23 @@ export function AccountPage({ name, email, sessions, hours, done, faults }: Prop
       <HungSection title="Password">
         <Form key={done} method="post" className="max-w-160 space-y-2">
           <input type="hidden" name="username" autoComplete="username" value={email} />
-          <PasswordField name="current" label="Password now" error={faults?.current} />
-          <PasswordField name="password" label="New password" fresh error={faults?.password} />
+          <PasswordField name="current" label="Password now" error={answer?.password?.current} />
+          <PasswordField name="password" label="New password" fresh error={answer?.password?.password} />
           <SubmitButton busy="Changing">Change the password</SubmitButton>
         </Form>
+      </HungSection>
+      <HungSection title="One-time codes">
+        <p className="max-w-160">
+          {codesSince === null
+            ? "Off: the password alone signs you in."
+            : `On since ${minuteOf(codesSince)}: signing in takes a code from your app beside the password.`}{" "}
+          <Link to="/account/codes" className="link">
+            {codesSince === null ? "Set up one-time codes" : "Recovery codes, turn off"}
+          </Link>
+        </p>
+      </HungSection>
+      <HungSection title="E-mail address">
+        <AddressForm key={email} email={email} proofAsked={proofAsked} answer={answer?.address} />
       </HungSection>
     </>
   );

@@ -1,7 +1,8 @@
 import { SelectField, type Option } from "#app/components/ui/SelectField.tsx";
 import { PROGRAM_ROLES, SITE_ROLES } from "#app/policies/roles.ts";
 import type { ProgramRoleChoice } from "#app/schemas/person-form.ts";
-import { PasswordField } from "./PasswordField.tsx";
+import type { ProofAsked, ProofFault } from "#app/schemas/proof.ts";
+import { ProofFields } from "./ProofFields.tsx";
 
 const options = (values: readonly string[]): Option[] =>
   values.map((value) => ({ value, label: value.charAt(0).toUpperCase() + value.slice(1) }));
@@ -11,11 +12,11 @@ interface Props {
   programs: readonly ProgramRoleChoice[];
   /** what was typed before, by the names of the fields */
   typed: Record<string, string> | undefined;
-  proofAsked: boolean;
-  proofFault: string | undefined;
+  proofAsked: ProofAsked;
+  proofFault: ProofFault | undefined;
 }
 
-/** What a person is on the site and in each program, with the password where it is asked for. */
+/** What a person is on the site and in each program, with the proof of who changes it where it is asked for. */
 export function RoleFields({ siteRole, programs, typed, proofAsked, proofFault }: Props) {
   return (
     <>
@@ -38,14 +39,7 @@ export function RoleFields({ siteRole, programs, typed, proofAsked, proofFault }
           />
         </div>
       ))}
-      {proofAsked && (
-        <PasswordField
-          name="proof"
-          label="Your password"
-          hint="You signed in more than ten minutes ago."
-          error={proofFault}
-        />
-      )}
+      <ProofFields asked={proofAsked} fault={proofFault} />
     </>
   );
 }

@@ -1,6 +1,7 @@
-import { getInputProps } from "@conform-to/react";
+import { getInputProps, type FieldMetadata } from "@conform-to/react";
 import { NoteField } from "#app/components/forms/NoteField.tsx";
-import { PasswordField } from "#app/components/people/PasswordField.tsx";
+import { ProofFields } from "#app/components/people/ProofFields.tsx";
+import type { Proof, ProofFault } from "#app/schemas/proof.ts";
 import type { ReviewRevision, ReviewView } from "#app/schemas/review-view.ts";
 import { ReviewForm, type ReviewAnswer } from "./ReviewForm.tsx";
 import { HungSection } from "#app/components/ui/HungSection.tsx";
@@ -42,7 +43,7 @@ export function Decision({ view: { may, assumed, proofAsked }, revision: { obsta
               busy="Releasing: the papers are being set"
               primary
             >
-              {({ assumptions, remark, proof }) => (
+              {({ assumptions, remark, proof, proofCode }) => (
                 <>
                   <div className="field">
                     <label className="mb-0 flex min-h-8 items-center gap-2 text-body text-ink">
@@ -61,14 +62,7 @@ export function Decision({ view: { may, assumed, proofAsked }, revision: { obsta
                     {assumptions.errors && <small id={assumptions.errorId}>{assumptions.errors[0]}</small>}
                   </div>
                   <NoteField field={remark} label="Remark" rows={2} hint="May stay empty." />
-                  {proofAsked && (
-                    <PasswordField
-                      name={proof.name}
-                      label="Your password"
-                      hint="You signed in more than ten minutes ago."
-                      error={proof.errors?.[0]}
-                    />
-                  )}
+                  <ProofFields asked={proofAsked} fault={faultIn({ proof, proofCode })} />
                 </>
               )}
             </ReviewForm>
@@ -84,4 +78,12 @@ export function Decision({ view: { may, assumed, proofAsked }, revision: { obsta
       )}
     </>
   );
+}
+
+function faultIn(fields: Record<keyof Proof, FieldMetadata<string>>): ProofFault | undefined {
+  for (const field of ["proof", "proofCode"] as const) {
+    const sentence = fields[field].errors?.[0];
+    if (sentence !== undefined) return { field, sentence };
+  }
+  return undefined;
 }

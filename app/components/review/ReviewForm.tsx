@@ -13,7 +13,7 @@ interface Fields {
   comment: { step: string; text: string };
   deviate: { findings: string[]; reason: string; scope: string; until: string };
   return: { reason: string };
-  release: { assumptions: string; remark: string; proof: string };
+  release: { assumptions: string; remark: string; proof: string; proofCode: string };
 }
 
 interface Props<Intent extends keyof Fields> {

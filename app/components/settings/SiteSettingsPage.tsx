@@ -6,7 +6,10 @@ import { Notice } from "#app/components/ui/Notice.tsx";
 import { SelectField } from "#app/components/ui/SelectField.tsx";
 import type { Paper } from "#app/lib/paper-size.ts";
 import { PRINT_YEARS, type PrintRetention } from "#app/schemas/print-retention.ts";
+import type { Role } from "#app/policies/roles.ts";
+import type { ProofAsked, ProofFault } from "#app/schemas/proof.ts";
 import type { RecordStamp } from "#app/schemas/record-stamp.ts";
+import { CodesRequired } from "./CodesRequired.tsx";
 
 const PAPER_WORDS: Record<Paper, string> = { a4: "A4, 210 × 297 mm", letter: "Letter, 8.5 × 11 inches" };
 
@@ -14,13 +17,17 @@ interface Props {
   paper: Paper;
   stamp: RecordStamp;
   retention: readonly PrintRetention[];
+  codesFor: readonly Role[];
+  proofAsked: ProofAsked;
+  /** what was ticked and what was wrong in the form of the codes */
+  codes: { ticked: string[]; fault: ProofFault } | undefined;
   saved: boolean;
   /** what somebody else has saved in the meantime, and what this person had chosen */
   refused: { reason: string; version: number; chosen: Paper } | undefined;
 }
 
 /** What holds for the whole site. */
-export function SiteSettingsPage({ paper, stamp, retention, saved, refused }: Props) {
+export function SiteSettingsPage({ paper, stamp, retention, codesFor, proofAsked, codes, saved, refused }: Props) {
   const { version, updatedAt, updatedBy } = stamp;
   return (
     <>
@@ -38,7 +45,7 @@ export function SiteSettingsPage({ paper, stamp, retention, saved, refused }: Pr
           {refused.reason}
         </Notice>
       )}
-      {saved && !refused && <Notice kind="done" title="The site’s settings are saved." />}
+      {saved && !refused && !codes && <Notice kind="done" title="The site’s settings are saved." />}
       {/* A new version of the settings is a new form, or a choice made before would stay in it. */}
       <Form key={`${refused?.version ?? version} ${paper}`} method="post" className="frame max-w-160">
         <input type="hidden" name="version" value={refused?.version ?? version} />
@@ -54,6 +61,7 @@ export function SiteSettingsPage({ paper, stamp, retention, saved, refused }: Pr
         </div>
       </Form>
       <PrintsKept retention={retention} />
+      <CodesRequired codesFor={codesFor} ticked={codes?.ticked} proofAsked={proofAsked} fault={codes?.fault} />
     </>
   );
 }

@@ -3,15 +3,16 @@ import { Form } from "react-router";
 import { ChoiceField } from "#app/components/forms/ChoiceField.tsx";
 import { LineField } from "#app/components/forms/LineField.tsx";
 import { SubmitButton } from "#app/components/forms/SubmitButton.tsx";
-import { PasswordField } from "#app/components/people/PasswordField.tsx";
+import { ProofFields } from "#app/components/people/ProofFields.tsx";
 import { useRecordForm } from "#app/components/forms/use-record-form.ts";
 import { API_SCOPE_NAMES, API_SCOPES, TOKEN_LIVES, type ApiScope, type TokensView } from "#app/schemas/api-token.ts";
+import type { ProofAsked, ProofFault } from "#app/schemas/proof.ts";
 
 interface Props {
   programs: TokensView["programs"];
   lastResult: SubmissionResult<string[]> | undefined;
-  proofAsked: boolean;
-  proofFault: string | undefined;
+  proofAsked: ProofAsked;
+  proofFault: ProofFault | undefined;
 }
 
 interface Values extends Record<string, unknown> {
@@ -47,7 +48,7 @@ export function MakeToken({ programs, lastResult, proofAsked, proofFault }: Prop
         />
         <Scopes field={scopes} />
         <ChoiceField field={days} label="Good for" choices={LIVES} hint="It can be revoked at any time." />
-        {proofAsked && <PasswordField name="proof" label="Your password, to make it" error={proofFault} />}
+        <ProofFields asked={proofAsked} fault={proofFault} label="Your password, to make it" />
         <SubmitButton busy="Making">Make the token</SubmitButton>
       </Form>
     </section>

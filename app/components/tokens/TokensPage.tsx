@@ -4,6 +4,7 @@ import { PageHead } from "#app/components/layout/PageHead.tsx";
 import { EmptyState } from "#app/components/ui/EmptyState.tsx";
 import { Notice } from "#app/components/ui/Notice.tsx";
 import type { TokensView } from "#app/schemas/api-token.ts";
+import type { ProofFault } from "#app/schemas/proof.ts";
 import { MakeToken } from "./MakeToken.tsx";
 import { TokenList } from "./TokenList.tsx";
 
@@ -11,8 +12,7 @@ interface Props extends TokensView {
   revoked: boolean;
   made: string | null;
   lastResult: SubmissionResult<string[]> | undefined;
-  /** what stands at the field of the password */
-  proofFault: string | undefined;
+  proofFault: ProofFault | undefined;
 }
 
 /** The tokens with which other programs ask the API in the reader's name, and the form to make one. */

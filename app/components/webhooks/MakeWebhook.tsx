@@ -4,14 +4,15 @@ import { ChoiceField } from "#app/components/forms/ChoiceField.tsx";
 import { LineField } from "#app/components/forms/LineField.tsx";
 import { SubmitButton } from "#app/components/forms/SubmitButton.tsx";
 import { useRecordForm } from "#app/components/forms/use-record-form.ts";
-import { PasswordField } from "#app/components/people/PasswordField.tsx";
+import { ProofFields } from "#app/components/people/ProofFields.tsx";
 import { eventWords, WEBHOOK_EVENT_NAMES, type WebhookEventName, type WebhooksView } from "#app/schemas/webhook.ts";
+import type { ProofAsked, ProofFault } from "#app/schemas/proof.ts";
 
 interface Props {
   programs: WebhooksView["programs"];
   lastResult: SubmissionResult<string[]> | undefined;
-  proofAsked: boolean;
-  proofFault: string | undefined;
+  proofAsked: ProofAsked;
+  proofFault: ProofFault | undefined;
 }
 
 interface Values extends Record<string, unknown> {
@@ -45,7 +46,7 @@ export function MakeWebhook({ programs, lastResult, proofAsked, proofFault }: Pr
           input={{ inputMode: "url", autoCapitalize: "none", spellCheck: false, placeholder: "https://" }}
         />
         <Events field={events} />
-        {proofAsked && <PasswordField name="proof" label="Your password, to make it" error={proofFault} />}
+        <ProofFields asked={proofAsked} fault={proofFault} label="Your password, to make it" />
         <SubmitButton busy="Making">Make the webhook</SubmitButton>
       </Form>
     </section>

@@ -1,6 +1,6 @@
 import { Form } from "react-router";
 import { SubmitButton } from "#app/components/forms/SubmitButton.tsx";
-import { PasswordField } from "#app/components/people/PasswordField.tsx";
+import { ProofFields } from "#app/components/people/ProofFields.tsx";
 import { DataTable } from "#app/components/ui/DataTable.tsx";
 import { EmptyState } from "#app/components/ui/EmptyState.tsx";
 import { HungSection } from "#app/components/ui/HungSection.tsx";
@@ -16,12 +16,13 @@ import {
 } from "#app/schemas/webhook.ts";
 import { DELIVERY_COLUMNS, DELIVERY_STATE_WORDS } from "./delivery-columns.tsx";
 import { stateWords } from "./state-words.ts";
+import type { ProofAsked, ProofFault } from "#app/schemas/proof.ts";
 
 interface Props {
   webhook: WebhookRow & { secretMadeAt: string };
   page: ListPage<DeliveryRow>;
-  proofAsked: boolean;
-  proofFault: string | undefined;
+  proofAsked: ProofAsked;
+  proofFault: ProofFault | undefined;
 }
 
 const EVENT_OPTIONS = [...WEBHOOK_EVENT_NAMES, "test" as const].map((value) => ({ value, label: eventWords(value) }));
@@ -41,7 +42,7 @@ export function WebhookPage({ webhook, page, proofAsked, proofFault }: Props) {
             With another secret, what is sent from then on is signed with that one. A receiver that still has the old
             one refuses it, and gets it again once it has the new one, for some seven{"\u00A0"}hours.
           </p>
-          {proofAsked && <PasswordField name="proof" label="Your password, to renew it" error={proofFault} />}
+          <ProofFields asked={proofAsked} fault={proofFault} label="Your password, to renew it" />
           <SubmitButton busy="Renewing">Renew the secret</SubmitButton>
         </Form>
       </HungSection>

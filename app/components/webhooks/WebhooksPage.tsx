@@ -7,13 +7,14 @@ import type { WebhooksView } from "#app/schemas/webhook.ts";
 import { MakeWebhook } from "./MakeWebhook.tsx";
 import { SecretShown } from "./SecretShown.tsx";
 import { WebhookList } from "./WebhookList.tsx";
+import type { ProofFault } from "#app/schemas/proof.ts";
 
 interface Props extends WebhooksView {
   deleted: boolean;
   /** the secret of the one that was just made */
   secret: string | null;
   lastResult: SubmissionResult<string[]> | undefined;
-  proofFault: string | undefined;
+  proofFault: ProofFault | undefined;
 }
 
 /** The webhooks of the reader and of the programs that they look after, and the form to make one. */

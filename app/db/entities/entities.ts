@@ -27,6 +27,7 @@ import { MailChoice } from "./mail-choice.ts";
 import { MailOutbox } from "./mail-outbox.ts";
 import { Membership } from "./membership.ts";
 import { Person } from "./person.ts";
+import { OneTimeCodes } from "./one-time-codes.ts";
 import { PersonToken } from "./person-token.ts";
 import { Preference } from "./preference.ts";
 import { Program } from "./program.ts";
@@ -133,6 +134,7 @@ export const entities = [
   Favourite,
   SavedFilter,
   PersonToken,
+  OneTimeCodes,
   Preference,
   MailOutbox,
   MailChoice,

@@ -32,6 +32,7 @@ import { ApiAnswers } from "./2026-12-17-api-answers.ts";
 import { PrintRetention } from "./2026-12-18-print-retention.ts";
 import { AuditSeal } from "./2026-12-19-audit-seal.ts";
 import { Webhooks } from "./2026-12-20-webhooks.ts";
+import { OneTimeCodes } from "./2026-12-20-one-time-codes.ts";
 
 /** Every migration in the order in which it runs. */
 export const migrations = [
@@ -69,4 +70,5 @@ export const migrations = [
   { name: "2026-12-18-print-retention", class: PrintRetention },
   { name: "2026-12-19-audit-seal", class: AuditSeal },
   { name: "2026-12-20-webhooks", class: Webhooks },
+  { name: "2026-12-20-one-time-codes", class: OneTimeCodes },
 ];

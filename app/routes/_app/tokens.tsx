@@ -3,6 +3,7 @@ import { TokensPage } from "#app/components/tokens/TokensPage.tsx";
 import { newTokenSchema, revokeTokenSchema } from "#app/schemas/api-token.ts";
 import { scopeOf } from "#app/server/contexts.server.ts";
 import { postedForm } from "#app/server/form.server.ts";
+import { postedProof } from "#app/server/posted-proof.server.ts";
 import { parseForm } from "#app/server/parse-form.server.ts";
 import { problem } from "#app/server/problem.server.ts";
 import { proveAgain } from "#app/services/people/recent-proof.server.ts";
@@ -27,11 +28,10 @@ export async function action({ request, context }: Route.ActionArgs) {
   const submission = parseForm(formData, newTokenSchema);
   if (submission.status !== "success")
     return data({ lastResult: submission.reply(), made: null, proofFault: undefined }, { status: 400 });
-  const proof = formData.get("proof");
-  const proven = await proveAgain(scope, typeof proof === "string" ? proof : "");
+  const proven = await proveAgain(scope, postedProof(formData));
   if (proven.fault !== null)
     return data(
-      { lastResult: submission.reply({ formErrors: [proven.fault] }), made: null, proofFault: proven.fault },
+      { lastResult: submission.reply({ formErrors: [proven.fault.sentence] }), made: null, proofFault: proven.fault },
       { status: 400 },
     );
   const made = await makeToken(proven.scope, submission.value);

@@ -4,11 +4,15 @@ import { Mark } from "#app/components/drawings/Mark.tsx";
 import { TextField } from "#app/components/ui/TextField.tsx";
 import { localPath } from "#app/lib/local-path.ts";
 import { authenticator, signInSchema, SignInRefused, TooManyAttempts } from "#app/server/authenticator.server.ts";
-import { actorContext, requestIdContext } from "#app/server/contexts.server.ts";
-import { sessionCookie } from "#app/server/session-cookie.server.ts";
+import { actorContext, heldContext, requestIdContext } from "#app/server/contexts.server.ts";
+import { halfCookie, sessionCookie } from "#app/server/session-cookie.server.ts";
 import { thinningStory } from "#app/services/thinning-story.server.ts";
+import { HALF_LIFETIME, halfSignedIn } from "#app/services/codes/half-signed-in.server.ts";
 import { startSession } from "#app/services/sessions.server.ts";
 import type { Route } from "./+types/sign-in";
+
+/** What a link of a mail has done before it led here. */
+const DONE = ["set", "address"] as const;
 
 const PROMISE = "Flat and strong enough for every step, before any silicon is committed.";
 
@@ -27,7 +31,8 @@ export const meta: Route.MetaFunction = ({ loaderData }) => [
 
 export function loader({ context, url }: Route.LoaderArgs) {
   if (context.get(actorContext)) throw redirect(localPath(url.searchParams.get("next")));
-  return { story: thinningStory(), origin: url.origin, passwordSet: url.searchParams.has("set") };
+  if (context.get(heldContext)) throw redirect(`/sign-in/set-up${url.search}`);
+  return { story: thinningStory(), origin: url.origin, done: DONE.find((each) => url.searchParams.has(each)) ?? null };
 }
 
 export async function action({ request, context, url }: Route.ActionArgs) {
@@ -41,6 +46,11 @@ export async function action({ request, context, url }: Route.ActionArgs) {
     const headers = new Headers(request.headers);
     headers.set("X-Request-Id", requestId);
     const personId = await authenticator.authenticate("form", new Request(request, { headers }));
+    const half = await halfSignedIn(personId, requestId);
+    if (half !== null)
+      throw redirect(`/sign-in/code${url.search}`, {
+        headers: { "Set-Cookie": await halfCookie(request, half, HALF_LIFETIME) },
+      });
     const started = await startSession(personId, request.headers.get("User-Agent") ?? "", requestId);
     throw redirect(localPath(url.searchParams.get("next")), {
       headers: { "Set-Cookie": await sessionCookie(request, started) },
@@ -70,9 +80,11 @@ export default function SignIn({ actionData, loaderData }: Route.ComponentProps)
             </p>
             <h1 className="mt-6 text-answer font-medium">{PROMISE}</h1>
           </div>
-          {loaderData.passwordSet && (
+          {loaderData.done && (
             <p role="status" className="border-t border-line px-6 py-3">
-              Your password is set. Sign in with it.
+              {loaderData.done === "set"
+                ? "Your password is set. Sign in with it."
+                : "Your address is changed. Sign in with the new one."}
             </p>
           )}
           <Form method="post" className="border-t border-ink" aria-label="Sign in">

@@ -5,7 +5,7 @@ import type { NewToken, TokenRow, TokensView } from "#app/schemas/api-token.ts";
 import { notFound, problem } from "#app/server/problem.server.ts";
 import { inScope, type ActorScope } from "#app/server/scope.server.ts";
 import { secretDigest } from "#app/server/secret-digest.server.ts";
-import { isProvenLately, requireRecentProof } from "../people/recent-proof.server.ts";
+import { proofAsked, requireRecentProof } from "../people/recent-proof.server.ts";
 import { requireInProgram, requireInSomeProgram } from "../permission.server.ts";
 import { idFrom } from "../uuid.server.ts";
 
@@ -52,7 +52,7 @@ export async function tokensView(scope: ActorScope): Promise<TokensView> {
       rows: rows.toSorted((a, b) => Number(b.state === "good") - Number(a.state === "good")),
       programs: programs.map(({ programId, programName }) => ({ id: programId, name: programName })),
       ofAll,
-      proofAsked: !isProvenLately(scope),
+      proofAsked: proofAsked(scope),
     };
   });
 }

@@ -74,5 +74,48 @@ function wordsOf(kind: AccountMail, secret: string) {
         open: "Set a new password",
         path: "/forgotten",
       };
+    case "codes on":
+      return {
+        subject: "Planeward: one-time codes are on",
+        sentence:
+          "Signing in to your account takes a one-time code from now on, and every other session of it was ended.",
+        mind: NOT_YOU,
+        open: "Look at your account",
+        path: "/account/codes",
+      };
+    case "codes off":
+      return {
+        subject: "Planeward: one-time codes are off",
+        sentence:
+          "Signing in to your account takes no one-time code any more, and every other session of it was ended.",
+        mind: NOT_YOU,
+        open: "Look at your account",
+        path: "/account/codes",
+      };
+    case "codes reset":
+      return {
+        subject: "Planeward: your one-time codes were reset",
+        sentence:
+          "An administrator has taken the one-time codes off your account, and every session of it was ended. Your password alone signs you in, until you set up codes anew.",
+        mind: "If you did not ask for it, ask your administrator at once.",
+        open: "Sign in",
+        path: "/account/codes",
+      };
+    case "recovery codes made":
+      return {
+        subject: "Planeward: new recovery codes",
+        sentence: "New recovery codes were made for your account. Those before work no more.",
+        mind: NOT_YOU,
+        open: "Look at your account",
+        path: "/account/codes",
+      };
+    case "recovery code used":
+      return {
+        subject: "Planeward: a recovery code was used",
+        sentence: "A recovery code of your account was used in place of a one-time code. It works no more.",
+        mind: NOT_YOU,
+        open: "Look at your account",
+        path: "/account/codes",
+      };
   }
 }

@@ -1,5 +1,6 @@
 import type { EntityManager, FilterQuery } from "@mikro-orm/postgresql";
 import { Membership } from "#app/db/entities/membership.ts";
+import { OneTimeCodes } from "#app/db/entities/one-time-codes.ts";
 import { Person } from "#app/db/entities/person.ts";
 import { Program } from "#app/db/entities/program.ts";
 import { PAGE_SIZE, type ListPage, type ListParams } from "#app/lib/list-params.ts";
@@ -9,7 +10,7 @@ import { inScope, type ActorScope } from "#app/server/scope.server.ts";
 import { everyWord } from "../like.server.ts";
 import { requireOnSite } from "../permission.server.ts";
 import { idFrom } from "../uuid.server.ts";
-import { isProvenLately } from "./recent-proof.server.ts";
+import { proofAsked } from "./recent-proof.server.ts";
 
 export const PEOPLE_SORTS = ["name", "signed-in"] as const;
 
@@ -73,7 +74,7 @@ export function stateOf({ active, invitedAt }: Pick<Person, "active" | "invitedA
 export async function inviteForm(scope: ActorScope) {
   requireOnSite(scope, "manage people");
   const programs = await inScope(scope, (em) => roleChoices(em, null));
-  return { programs, proofAsked: !isProvenLately(scope) };
+  return { programs, proofAsked: proofAsked(scope) };
 }
 
 /** A person with what they hold in each program. @throws 404 */
@@ -85,7 +86,14 @@ export async function personPage(scope: ActorScope, id: string | undefined) {
     const [row] = await rowsOf(em, [person]);
     if (!row) throw notFound("person");
     const programs = await roleChoices(em, person.id);
-    return { person: row, programs, isSelf: person.id === scope.actor.id, proofAsked: !isProvenLately(scope) };
+    const codes = await em.findOne(OneTimeCodes, { person: person.id, confirmedAt: { $ne: null } });
+    return {
+      person: row,
+      programs,
+      codesSince: codes?.confirmedAt?.toISOString() ?? null,
+      isSelf: person.id === scope.actor.id,
+      proofAsked: proofAsked(scope),
+    };
   });
 }
 

@@ -1,10 +1,13 @@
 import { randomUUID } from "node:crypto";
 import type { EntityManager } from "@mikro-orm/postgresql";
 import { Membership } from "#app/db/entities/membership.ts";
+import { OneTimeCodes } from "#app/db/entities/one-time-codes.ts";
 import { Person } from "#app/db/entities/person.ts";
+import type { Proof } from "#app/schemas/proof.ts";
 import type { InviteValues, RoleValues } from "#app/schemas/person-form.ts";
 import { notFound, problem } from "#app/server/problem.server.ts";
 import { inScope, type ActorScope } from "#app/server/scope.server.ts";
+import { mailAccount } from "../mail/mail-account.server.ts";
 import { requireOnSite } from "../permission.server.ts";
 import { idFrom } from "../uuid.server.ts";
 import { requireRecentProof } from "./recent-proof.server.ts";
@@ -23,7 +26,7 @@ const lockAdministrators = (em: EntityManager) =>
  */
 export async function invitePerson(
   scope: ActorScope,
-  { name, email, siteRole, memberships }: Omit<InviteValues, "proof">,
+  { name, email, siteRole, memberships }: Omit<InviteValues, keyof Proof>,
 ): Promise<string | null> {
   requireOnSite(scope, MANAGE);
   requireRecentProof(scope);
@@ -99,6 +102,20 @@ export async function reactivatePerson(scope: ActorScope, id: string | undefined
   });
 }
 
+/** Takes the one-time codes off somebody's account, whose sessions end at once; a mail tells them. @throws 409 where they have none */
+export async function resetCodes(scope: ActorScope, id: string | undefined): Promise<void> {
+  requireOnSite(scope, MANAGE);
+  requireRecentProof(scope);
+  await withPerson(scope, id, async (em, person) => {
+    refuseSelf(scope, person);
+    const codes = await em.findOne(OneTimeCodes, { person: person.id });
+    if (!codes) throw problem(409, "This account has no one-time codes. Open the page again.");
+    await em.remove(codes).flush();
+    await em.execute("select end_sessions_of(?)", [person.id]);
+    await mailAccount(em, { kind: "codes reset", person: person.id, key: randomUUID(), by: scope.actor.id });
+  });
+}
+
 async function withPerson(
   scope: ActorScope,
   id: string | undefined,
@@ -116,7 +133,10 @@ async function withPerson(
 
 function refuseSelf({ actor }: ActorScope, { id }: Person): void {
   if (id === actor.id)
-    throw problem(409, "This is your own account. Another administrator changes its roles or deactivates it.");
+    throw problem(
+      409,
+      "This is your own account. Another administrator changes its roles, deactivates it or resets its codes.",
+    );
 }
 
 async function refuseLast(em: EntityManager, { id }: Person): Promise<void> {

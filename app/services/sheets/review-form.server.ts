@@ -9,6 +9,9 @@ import { releaseRevision } from "./release.server.ts";
 import { commentInReview, recordDeviation, returnRevision, signDeviation } from "./review-deeds.server.ts";
 import { newestRevisionOf } from "./revision.server.ts";
 
+/** Fields that are never sent back. */
+const PROOF = ["proof", "proofCode"] as const;
+
 /**
  * Takes a form of the page of a review.
  * @returns the form to be shown again where something in it is wrong; null when it was done
@@ -24,14 +27,17 @@ export async function takeReviewForm(
   if (submission.status !== "success")
     return {
       intent: typeof intent === "string" ? intent : "",
-      lastResult: submission.reply({ hideFields: ["proof"] }),
+      lastResult: submission.reply({ hideFields: [...PROOF] }),
     };
   const form = submission.value;
-  const proven = form.intent === "release" ? await proveAgain(scope, form.proof) : { fault: null, scope };
+  const proven = form.intent === "release" ? await proveAgain(scope, form) : { fault: null, scope };
   if (proven.fault !== null)
     return {
       intent: form.intent,
-      lastResult: submission.reply({ hideFields: ["proof"], fieldErrors: { proof: [proven.fault] } }),
+      lastResult: submission.reply({
+        hideFields: [...PROOF],
+        fieldErrors: { [proven.fault.field]: [proven.fault.sentence] },
+      }),
     };
   await take(proven.scope, assessmentId, form, origin);
   return null;

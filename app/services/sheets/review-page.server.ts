@@ -11,7 +11,7 @@ import { releaseObstacles } from "#app/policies/release.ts";
 import type { ReviewRevision, ReviewView } from "#app/schemas/review-view.ts";
 import { inScope, type ActorScope } from "#app/server/scope.server.ts";
 import { findAssessment } from "../assessments/assessments.server.ts";
-import { isProvenLately } from "../people/recent-proof.server.ts";
+import { proofAsked } from "../people/recent-proof.server.ts";
 import { whyNoReview } from "./ask-review.server.ts";
 import { lastReleased } from "./last-released.server.ts";
 import { inForce, releaseCaseOf } from "./release-case.server.ts";
@@ -53,7 +53,7 @@ export async function reviewPage(scope: ActorScope, assessmentId: string | undef
         return: inReview && (may(RELEASE) || revision.own),
         release: inReview && may(RELEASE),
       },
-      proofAsked: !isProvenLately(scope),
+      proofAsked: proofAsked(scope),
     };
   });
 }

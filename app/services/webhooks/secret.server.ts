@@ -13,5 +13,9 @@ export function newSecret(webhookId: string): { secret: string; sealedSecret: st
 }
 
 /** @throws where it was sealed under another secret of the environment */
-export const readSecret = (webhookId: string, sealedSecret: string): string =>
-  unseal(sealedSecret, purposeOf(webhookId));
+export function readSecret(webhookId: string, sealedSecret: string): string {
+  const secret = unseal(sealedSecret, purposeOf(webhookId));
+  if (secret === null)
+    throw new Error("The secret of a webhook does not open: SECRET_KEY is not the one that it was made with.");
+  return secret;
+}

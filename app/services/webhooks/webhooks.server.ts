@@ -5,7 +5,7 @@ import { mayInProgram, programsWhere } from "#app/policies/permissions.ts";
 import type { NewWebhook, WebhookRow, WebhooksView } from "#app/schemas/webhook.ts";
 import { notFound } from "#app/server/problem.server.ts";
 import { inScope, type ActorScope } from "#app/server/scope.server.ts";
-import { isProvenLately, requireRecentProof } from "../people/recent-proof.server.ts";
+import { proofAsked, requireRecentProof } from "../people/recent-proof.server.ts";
 import { requireInProgram, requireInSomeProgram } from "../permission.server.ts";
 import { idFrom } from "../uuid.server.ts";
 import { newSecret } from "./secret.server.ts";
@@ -30,7 +30,7 @@ export async function webhooksView(scope: ActorScope): Promise<WebhooksView> {
         .filter((webhook) => maySee(scope, webhook))
         .map((webhook) => rowOf(webhook, webhook.program.name, names, left)),
       programs: programs.map(({ programId, programName }) => ({ id: programId, name: programName })),
-      proofAsked: !isProvenLately(scope),
+      proofAsked: proofAsked(scope),
     };
   });
 }
@@ -93,7 +93,7 @@ export async function webhookPage(scope: ActorScope, id: string | undefined) {
     const row = rowOf(webhook, webhook.program.name, await namesOf(em, [webhook]), left);
     return {
       webhook: { ...row, secretMadeAt: webhook.secretMadeAt.toISOString() },
-      proofAsked: !isProvenLately(scope),
+      proofAsked: proofAsked(scope),
     };
   });
 }

@@ -24,11 +24,12 @@ export async function action({ request, context }: Route.ActionArgs) {
   requireOnSite(scope, "manage people");
   const { formData, submission } = await readForm(request, inviteSchema);
   const refused = (faults: Record<string, string[] | null | undefined>) =>
-    data({ faults, typed: typedIn(formData) }, { status: 400 });
+    data({ faults, typed: typedIn(formData), proofFault: undefined }, { status: 400 });
   if (submission.status !== "success") return refused(submission.reply().error ?? {});
-  const { proof, ...values } = submission.value;
-  const proven = await proveAgain(scope, proof);
-  if (proven.fault !== null) return refused({ proof: [proven.fault] });
+  const { proof, proofCode, ...values } = submission.value;
+  const proven = await proveAgain(scope, { proof, proofCode });
+  if (proven.fault !== null)
+    return data({ faults: null, typed: typedIn(formData), proofFault: proven.fault }, { status: 400 });
   const id = await invitePerson(proven.scope, values);
   if (id === null) return refused({ email: ["There is an account with this address already. Find it in the list."] });
   throw redirect(`/people/${id}?done=invited`);
@@ -36,7 +37,7 @@ export async function action({ request, context }: Route.ActionArgs) {
 
 export default function Invite({ loaderData: { programs, proofAsked }, actionData }: Route.ComponentProps) {
   const typed = actionData?.typed;
-  const fault = (name: string) => actionData?.faults[name]?.[0];
+  const fault = (name: string) => actionData?.faults?.[name]?.[0];
   return (
     <>
       <PageHead title="Invite somebody" crumbs={[{ name: "People", path: "/people" }]} />
@@ -62,7 +63,13 @@ export default function Invite({ loaderData: { programs, proofAsked }, actionDat
           defaultValue={typed?.["email"]}
           error={fault("email")}
         />
-        <RoleFields siteRole="" programs={programs} typed={typed} proofAsked={proofAsked} proofFault={fault("proof")} />
+        <RoleFields
+          siteRole=""
+          programs={programs}
+          typed={typed}
+          proofAsked={proofAsked}
+          proofFault={actionData?.proofFault}
+        />
         <SubmitButton busy="Inviting">Invite</SubmitButton>
       </Form>
     </>

@@ -1,7 +1,7 @@
 import { data, Form, redirect } from "react-router";
 import { SubmitButton } from "#app/components/forms/SubmitButton.tsx";
 import { PageHead } from "#app/components/layout/PageHead.tsx";
-import { PasswordField } from "#app/components/people/PasswordField.tsx";
+import { ProofFields } from "#app/components/people/ProofFields.tsx";
 import { PERSON_STATE_WORDS } from "#app/components/people/people-columns.tsx";
 import { RoleFields } from "#app/components/people/RoleFields.tsx";
 import { HungSection } from "#app/components/ui/HungSection.tsx";
@@ -10,6 +10,7 @@ import { minuteOf } from "#app/lib/minute-of.ts";
 import { rolesSchema } from "#app/schemas/person-form.ts";
 import { scopeOf } from "#app/server/contexts.server.ts";
 import { postedForm } from "#app/server/form.server.ts";
+import { postedProof } from "#app/server/posted-proof.server.ts";
 import { parseForm } from "#app/server/parse-form.server.ts";
 import { problem } from "#app/server/problem.server.ts";
 import { typedIn } from "#app/server/typed-in.server.ts";
@@ -20,6 +21,7 @@ import {
   deactivatePerson,
   inviteAgain,
   reactivatePerson,
+  resetCodes,
 } from "#app/services/people/manage-people.server.ts";
 import { proveAgain } from "#app/services/people/recent-proof.server.ts";
 import type { Route } from "./+types/person";
@@ -27,6 +29,7 @@ import type { Route } from "./+types/person";
 const DONE = {
   invited: "The invitation is on its way.",
   roles: "The roles are changed. They count from the next page on.",
+  reset: "The one-time codes are taken off, and every session of the account has ended. A mail tells them.",
   deactivated: "The account is deactivated, and every session of it has ended.",
 };
 
@@ -56,13 +59,16 @@ export async function action({ request, context, params: { personId } }: Route.A
     await deactivatePerson(scope, personId);
     throw done("deactivated");
   }
-  const proof = formData.get("proof");
-  const proven = await proveAgain(scope, typeof proof === "string" ? proof : "");
+  const proven = await proveAgain(scope, postedProof(formData));
   if (proven.fault !== null)
     return data({ intent, proofFault: proven.fault, typed: typedIn(formData) }, { status: 400 });
   if (intent === "reactivate") {
     await reactivatePerson(proven.scope, personId);
     throw done("invited");
+  }
+  if (intent === "reset codes") {
+    await resetCodes(proven.scope, personId);
+    throw done("reset");
   }
   const submission = parseForm(formData, rolesSchema);
   if (submission.status !== "success")
@@ -72,7 +78,7 @@ export async function action({ request, context, params: { personId } }: Route.A
 }
 
 export default function PersonRoute({ loaderData, actionData }: Route.ComponentProps) {
-  const { person, programs, isSelf, proofAsked, done } = loaderData;
+  const { person, programs, codesSince, isSelf, proofAsked, done } = loaderData;
   const { name, email, state, siteRole, lastSignInAt } = person;
   const faultOf = (intent: string) => (actionData?.intent === intent ? actionData.proofFault : undefined);
   return (
@@ -99,6 +105,21 @@ export default function PersonRoute({ loaderData, actionData }: Route.ComponentP
           </Form>
         )}
       </HungSection>
+      {!isSelf && codesSince !== null && (
+        <HungSection title="One-time codes">
+          <Form method="post" className="max-w-160 space-y-2">
+            <input type="hidden" name="intent" value="reset codes" />
+            <p>
+              On since {minuteOf(codesSince)}. Reset them when neither the app nor a recovery code is at hand any more,
+              and you are sure who asks: after that the password alone signs in.
+            </p>
+            <ProofFields asked={proofAsked} fault={faultOf("reset codes")} label="Your password, to reset" />
+            <SubmitButton busy="Resetting" removes>
+              Reset the codes
+            </SubmitButton>
+          </Form>
+        </HungSection>
+      )}
       {!isSelf && (
         <HungSection title="Account">
           <div className="max-w-160 space-y-4">
@@ -111,9 +132,7 @@ export default function PersonRoute({ loaderData, actionData }: Route.ComponentP
               <Form method="post" className="space-y-2">
                 <input type="hidden" name="intent" value="reactivate" />
                 <p>They get a mail with a link to set a new password, and are active once it is set.</p>
-                {proofAsked && (
-                  <PasswordField name="proof" label="Your password, to reactivate" error={faultOf("reactivate")} />
-                )}
+                <ProofFields asked={proofAsked} fault={faultOf("reactivate")} label="Your password, to reactivate" />
                 <SubmitButton busy="Reactivating">Reactivate</SubmitButton>
               </Form>
             )}

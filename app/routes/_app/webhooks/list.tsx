@@ -1,6 +1,7 @@
 import { data } from "react-router";
 import { WebhooksPage } from "#app/components/webhooks/WebhooksPage.tsx";
 import { newWebhookSchema } from "#app/schemas/webhook.ts";
+import { postedProof } from "#app/server/posted-proof.server.ts";
 import { scopeOf } from "#app/server/contexts.server.ts";
 import { environment } from "#app/server/environment.server.ts";
 import { readForm } from "#app/server/form.server.ts";
@@ -19,11 +20,10 @@ export async function action({ request, context }: Route.ActionArgs) {
   const { formData, submission } = await readForm(request, newWebhookSchema(environment.WEBHOOK_HTTP));
   if (submission.status !== "success")
     return data({ lastResult: submission.reply(), secret: null, proofFault: undefined }, { status: 400 });
-  const proof = formData.get("proof");
-  const proven = await proveAgain(scope, typeof proof === "string" ? proof : "");
+  const proven = await proveAgain(scope, postedProof(formData));
   if (proven.fault !== null)
     return data(
-      { lastResult: submission.reply({ formErrors: [proven.fault] }), secret: null, proofFault: proven.fault },
+      { lastResult: submission.reply({ formErrors: [proven.fault.sentence] }), secret: null, proofFault: proven.fault },
       { status: 400 },
     );
   const made = await makeWebhook(proven.scope, submission.value);

@@ -4,6 +4,7 @@ import { Notice } from "#app/components/ui/Notice.tsx";
 import { SecretShown } from "#app/components/webhooks/SecretShown.tsx";
 import { WebhookPage } from "#app/components/webhooks/WebhookPage.tsx";
 import { readListParams } from "#app/lib/list-params.ts";
+import { postedProof } from "#app/server/posted-proof.server.ts";
 import { scopeOf } from "#app/server/contexts.server.ts";
 import { postedForm } from "#app/server/form.server.ts";
 import { withinPages } from "#app/server/list-page.server.ts";
@@ -56,8 +57,7 @@ export async function action({ request, context, params: { webhookId } }: Route.
     throw redirect("/webhooks?done=deleted");
   }
   if (intent !== "renew") throw problem(400, "This is no deed. Open the page again and press one of its buttons.");
-  const proof = formData.get("proof");
-  const proven = await proveAgain(scope, typeof proof === "string" ? proof : "");
+  const proven = await proveAgain(scope, postedProof(formData));
   if (proven.fault !== null) return data({ secret: null, proofFault: proven.fault }, { status: 400 });
   return data(
     { secret: await renewSecret(proven.scope, webhookId), proofFault: undefined },
