@@ -197,10 +197,10 @@ describe("choices", () => {
     expect(kept.find(({ kind }) => kind === "lot held")).toMatchObject({ essential: true, choice: "at once" });
   });
 
-  test("of a guest are those of sheets alone", async () => {
+  test("of a guest are those of sheets, and of the webhooks that they may keep", async () => {
     const { mailChoices } = await choosing();
     const kinds = (await mailChoices(people["guest"])).map(({ kind }) => kind);
-    expect(kinds).toEqual(["sheet released", "sheet superseded", "sheet withdrawn"]);
+    expect(kinds).toEqual(["sheet released", "sheet superseded", "sheet withdrawn", "webhook switched off"]);
   });
 
   test("are changed by the link of a mail without signing in, and by no other", async () => {

@@ -36,7 +36,7 @@ export function MakeToken({ programs, lastResult, proofAsked, proofFault }: Prop
       <h2 id="make-token" className="font-semibold">
         Make a token
       </h2>
-      <Form method="post" {...getFormProps(form)} className="mt-3 space-y-2">
+      <Form method="post" {...getFormProps(form)} className="mt-3 max-w-160 space-y-2">
         <input type="hidden" name="intent" value="make" />
         <LineField field={name} label="What will use it" hint="Such as: bow gauge in bay 3." />
         <ChoiceField

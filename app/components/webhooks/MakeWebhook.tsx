@@ -30,7 +30,7 @@ export function MakeWebhook({ programs, lastResult, proofAsked, proofFault }: Pr
       <h2 id="make-webhook" className="font-semibold">
         Make a webhook
       </h2>
-      <Form method="post" {...getFormProps(form)} className="mt-3 space-y-2">
+      <Form method="post" {...getFormProps(form)} className="mt-3 max-w-160 space-y-2">
         <LineField field={name} label="What receives it" hint="Such as: line board of bay 3." />
         <ChoiceField
           field={program}

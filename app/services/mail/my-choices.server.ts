@@ -14,7 +14,7 @@ import type { AnnouncementKind } from "#app/schemas/announcement.ts";
 import { notFound } from "#app/server/problem.server.ts";
 import { inScope, type ActorScope, type Scope } from "#app/server/scope.server.ts";
 
-/** Kinds of mail that can reach the person, with what they have chosen; of a guest only those of sheets. */
+/** Kinds of mail that can reach the person, with what they have chosen; of a guest only those of sheets and webhooks. */
 export async function mailChoices(scope: ActorScope): Promise<MailChoiceRow[]> {
   const chosen = await inScope(scope, (em) => chosenBy(em, scope.actor.id));
   return ANNOUNCEMENT_KINDS.filter((kind) => programsWhere(scope.actor, KINDS_OF_MAIL[kind].readers).length > 0).map(
