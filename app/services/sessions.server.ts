@@ -14,6 +14,8 @@ export const ABSOLUTE_LIFETIME = 24 * 60 * MINUTE;
 /** A token in use is replaced after this long; the old one stays good for requests already on their way. */
 const ROTATE_AFTER = 15 * MINUTE;
 const OLD_TOKEN_GRACE = MINUTE;
+/** A person may have so many at once; where one more begins, the one that was used least lately ends. */
+export const MOST_SESSIONS = 50;
 /** `lastSeenAt` is written at most this often, so that reading pages does not write. */
 const NOTE_USE_AFTER = MINUTE;
 
@@ -44,6 +46,12 @@ export async function startSession(personId: string, userAgent: string, requestI
       userAgent: userAgent.slice(0, 200),
     });
     await em.flush();
+    const beyond = await em.find(
+      Session,
+      { person: personId },
+      { fields: ["id"], orderBy: { lastSeenAt: "desc", createdAt: "desc", id: "asc" }, offset: MOST_SESSIONS },
+    );
+    if (beyond.length > 0) await em.nativeDelete(Session, { id: { $in: beyond.map(({ id }) => id) } });
     await em.nativeUpdate(Person, { id: personId }, { lastSignInAt: now });
     return { token, expiresAt };
   });

@@ -23,6 +23,8 @@ test("files are served as what they are and kept for good", async ({ request }) 
   const answer = await request.get(file);
   expect(answer.headers()["x-content-type-options"]).toBe("nosniff");
   expect(answer.headers()["cache-control"]).toContain("immutable");
+  for (const path of [file, "/unreachable.html", "/mark.svg"])
+    expect((await request.get(path)).headers()["content-security-policy"], path).toBe("frame-ancestors 'none'");
 });
 
 test("a form that another site sends is not carried out", async ({ page, baseURL }) => {

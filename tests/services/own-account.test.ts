@@ -36,6 +36,24 @@ test("a person sees and ends their own sessions and nobody else's", async () => 
   await endOwnSession(here.scope, listed[1]?.id);
   expect(await runs(there.token)).toBe(false);
   expect(await runs(here.token)).toBe(true);
+  const { id } = here.scope.session ?? { id: "" };
+  const left = { ...here.scope, session: { id, provenAt: 0, codes: "off" as const } };
+  await expect(endOwnSession(left, id)).rejects.toMatchObject({ init: { status: 403 } });
+});
+
+test("where one session too many begins, the one that was used least lately ends", async () => {
+  const { MOST_SESSIONS } = await sessions();
+  const first = await signedIn("guest", "first");
+  const used = await signedIn("guest", "used");
+  await asOwner(
+    database,
+    "update session set last_seen_at = now() + interval '1 minute' where person_id = ? and user_agent = 'used'",
+    [used.scope.actor.id],
+  );
+  for (let more = 2; more < MOST_SESSIONS; more += 1) await signedIn("guest", "more");
+  expect([await runs(first.token), await runs(used.token)]).toEqual([true, true]);
+  await signedIn("guest", "one too many");
+  expect([await runs(first.token), await runs(used.token)]).toEqual([false, true]);
 });
 
 test("a password is changed by who knows the old one; every other session ends and a mail tells", async () => {

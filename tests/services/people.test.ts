@@ -1,3 +1,4 @@
+import { randomUUID } from "node:crypto";
 import { beforeAll, beforeEach, expect, test } from "vitest";
 import { createDemoAccounts, setDemoPasswords } from "#app/db/seeders/demo-accounts.ts";
 import { readListParams } from "#app/lib/list-params.ts";
@@ -78,6 +79,26 @@ test("an invitation that is sent again ends the one before", async () => {
   expect(await passwordLink(first, "test")).toBeNull();
   expect(await passwordLink(second, "test")).toMatchObject({ isFirst: true });
   await expect(inviteAgain(administrator, await idOf("guest"))).rejects.toMatchObject(status(409));
+});
+
+test("whoever has lost a device is signed out everywhere, by an administrator who has proved themselves", async () => {
+  const { signOutEverywhere } = await managing();
+  const { startSession, resumeSession } = await import("#app/services/sessions.server.ts");
+  const id = await idOf("guest");
+  const { token } = await startSession(id, "a lost tablet", "test");
+  const left = { ...administrator, session: { id: randomUUID(), provenAt: 0, codes: "off" as const } };
+  await expect(signOutEverywhere(left, id)).rejects.toMatchObject(status(403));
+  await expect(signOutEverywhere(administrator, administrator.actor.id)).rejects.toMatchObject(status(409));
+  expect(await resumeSession(token, "test")).not.toBeNull();
+  await signOutEverywhere(administrator, id);
+  expect(await resumeSession(token, "test")).toBeNull();
+  const trail = await asOwner(
+    database,
+    "select 1 from audit_event where action = 'signed out' and actor_id = ? and subject_id = ?",
+    [administrator.actor.id, id],
+  );
+  expect(trail).toHaveLength(1);
+  expect(await startSession(id, "a new one", "test")).toHaveProperty("token");
 });
 
 test("whoever is deactivated is out at once, and comes back by a new password", async () => {

@@ -11,6 +11,7 @@ const MINUTE = 60_000;
 
 let owner: ActorScope;
 let password: string;
+let token: string;
 
 beforeAll(async () => {
   await setDemoPasswords(database.owner, accounts);
@@ -18,7 +19,7 @@ beforeAll(async () => {
   const { startSession, resumeSession } = await import("#app/services/sessions.server.ts");
   const known = await scopeOfPerson(database, "process-owner");
   password = accounts.find(({ email }) => email === known.actor.email)?.password ?? "";
-  const { token } = await startSession(known.actor.id, "a browser", "test");
+  ({ token } = await startSession(known.actor.id, "a browser", "test"));
   owner = { ...known, session: (await resumeSession(token, "test"))?.session ?? null };
 }, 60_000);
 
@@ -55,6 +56,12 @@ test("afterwards the password proves it, and is noted in the session; a wrong on
     "select proven_at > now() - interval '1 minute' as lately from session",
   );
   expect(row?.lately).toBe(true);
+  const { resumeSession } = await import("#app/services/sessions.server.ts");
+  const next = (await resumeSession(token, "test"))?.renewed?.token ?? "";
+  expect(next).not.toBe("");
+  await asOwner(database, "update session set rotated_at = now() - interval '2 minutes'");
+  expect(await resumeSession(token, "test"), "the token of before the proof").toBeNull();
+  expect(await resumeSession(next, "test")).not.toBeNull();
 });
 
 test("guesses are limited, and the right password does not count then either", async () => {

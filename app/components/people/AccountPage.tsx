@@ -6,9 +6,10 @@ import { Notice } from "#app/components/ui/Notice.tsx";
 import { deviceWords } from "#app/lib/device-words.ts";
 import { minuteOf } from "#app/lib/minute-of.ts";
 import type { OwnSession } from "#app/schemas/own-account.ts";
-import type { ProofAsked } from "#app/schemas/proof.ts";
+import type { ProofAsked, ProofFault } from "#app/schemas/proof.ts";
 import { AddressForm, type AddressAnswer } from "./AddressForm.tsx";
 import { PasswordField } from "./PasswordField.tsx";
+import { ProofFields } from "./ProofFields.tsx";
 
 const DONE = {
   ended: "That session has ended.",
@@ -33,6 +34,7 @@ interface Props {
 export interface AccountAnswer {
   password?: { current: string | undefined; password: string | undefined };
   address?: AddressAnswer;
+  ending?: ProofFault;
 }
 
 /** A person's own account: where they are signed in, their password, codes and address. */
@@ -46,11 +48,17 @@ export function AccountPage({ name, email, sessions, hours, codesSince, proofAsk
           A session ends {hours.idle}&nbsp;hours after its last use, and {hours.absolute}&nbsp;hours after signing in
           whatever happens. End what you do not know, then change your password.
         </p>
-        <ul className="max-w-160 border-t border-line">
-          {sessions.map((session) => (
-            <Session key={session.id} {...session} />
-          ))}
-        </ul>
+        <Form method="post" className="max-w-160 space-y-2">
+          <input type="hidden" name="intent" value="end" />
+          <ul className="border-t border-line">
+            {sessions.map((session) => (
+              <Session key={session.id} {...session} />
+            ))}
+          </ul>
+          {sessions.some(({ isThis }) => !isThis) && (
+            <ProofFields asked={proofAsked} fault={answer?.ending} label="Your password, to sign out elsewhere" />
+          )}
+        </Form>
       </HungSection>
       <HungSection title="Password">
         <Form key={done} method="post" className="max-w-160 space-y-2">
@@ -90,18 +98,15 @@ function Session({ id, userAgent, createdAt, lastSeenAt, isThis }: OwnSession) {
       {isThis ? (
         <p>This one</p>
       ) : (
-        <Form method="post">
-          <input type="hidden" name="intent" value="end" />
-          <button
-            type="submit"
-            name="session"
-            value={id}
-            className="btn"
-            aria-label={`Sign out there: ${device}, signed in ${minuteOf(createdAt)}`}
-          >
-            Sign out there
-          </button>
-        </Form>
+        <button
+          type="submit"
+          name="session"
+          value={id}
+          className="btn"
+          aria-label={`Sign out there: ${device}, signed in ${minuteOf(createdAt)}`}
+        >
+          Sign out there
+        </button>
       )}
     </li>
   );

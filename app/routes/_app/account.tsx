@@ -36,8 +36,10 @@ export async function action({ request, context }: Route.ActionArgs) {
   const scope = scopeOf(context);
   const formData = await postedForm(request);
   if (formData.get("intent") === "end") {
+    const proven = await proveAgain(scope, postedProof(formData));
+    if (proven.fault !== null) return refused({ ending: proven.fault });
     const id = formData.get("session");
-    await endOwnSession(scope, typeof id === "string" ? id : undefined);
+    await endOwnSession(proven.scope, typeof id === "string" ? id : undefined);
     throw redirect("/account?done=ended");
   }
   if (formData.get("intent") === "address") return takeAddress(scope, formData);

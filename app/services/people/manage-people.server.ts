@@ -1,5 +1,6 @@
 import { randomUUID } from "node:crypto";
 import type { EntityManager } from "@mikro-orm/postgresql";
+import { AuditEvent } from "#app/db/entities/audit-event.ts";
 import { Membership } from "#app/db/entities/membership.ts";
 import { OneTimeCodes } from "#app/db/entities/one-time-codes.ts";
 import { Person } from "#app/db/entities/person.ts";
@@ -87,6 +88,29 @@ export async function deactivatePerson(scope: ActorScope, id: string | undefined
     await em.flush();
     await endTokens(em, person.id);
     await em.execute("select end_sessions_of(?)", [person.id]);
+  });
+}
+
+/** Ends every session of somebody whose device is lost or in strange hands; the account stays as it is, and the trail says so. */
+export async function signOutEverywhere(scope: ActorScope, id: string | undefined): Promise<void> {
+  requireOnSite(scope, MANAGE);
+  requireRecentProof(scope);
+  await withPerson(scope, id, async (em, person) => {
+    refuseSelf(scope, person);
+    await em.execute("select end_sessions_of(?)", [person.id]);
+    em.create(AuditEvent, {
+      id: randomUUID(),
+      at: new Date(),
+      actorId: scope.actor.id,
+      programId: null,
+      action: "signed out",
+      subject: "session",
+      subjectId: person.id,
+      field: null,
+      from: null,
+      to: null,
+      requestId: scope.requestId,
+    });
   });
 }
 

@@ -7,7 +7,7 @@ import { mailAccount } from "../mail/mail-account.server.ts";
 import { ABSOLUTE_LIFETIME, IDLE_LIFETIME } from "../sessions.server.ts";
 import { idFrom } from "../uuid.server.ts";
 import { passwordFault } from "./password-fault.server.ts";
-import { ownPasswordFault } from "./recent-proof.server.ts";
+import { ownPasswordFault, requireRecentProof } from "./recent-proof.server.ts";
 import { storePassword } from "./set-password.server.ts";
 import { endTokens } from "./tokens.server.ts";
 
@@ -36,8 +36,12 @@ export function ownSessions({ actor, session, ...rest }: ActorScope): Promise<Ow
   });
 }
 
-/** Ends one of the person's own sessions; another's looks as if it had ended, and one that has is no error. */
+/**
+ * Ends one of the person's own sessions; another's looks as if it had ended, and one that has is no error.
+ * @throws 403 without a recent proof: whoever finds a session open must not shut its owner out
+ */
 export async function endOwnSession(scope: ActorScope, id: string | undefined): Promise<void> {
+  requireRecentProof(scope);
   await inScope(scope, (em) => em.nativeDelete(Session, { id: idFrom(id, "session"), person: scope.actor.id }));
 }
 

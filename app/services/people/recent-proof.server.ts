@@ -47,7 +47,9 @@ export async function proveAgain(
       : await ownProofFault(scope, given);
   if (fault !== null) return { fault, scope: null };
   const provenAt = new Date();
-  await inScope(scope, (em) => em.nativeUpdate(Session, { id: session.id, person: actor.id }, { provenAt }));
+  // The next request is given another token: whatever was known of the old one is worth nothing after the proof.
+  const renewed = { provenAt, rotatedAt: new Date(0) };
+  await inScope(scope, (em) => em.nativeUpdate(Session, { id: session.id, person: actor.id }, renewed));
   return { fault: null, scope: { ...scope, session: { ...session, provenAt: provenAt.getTime() } } };
 }
 

@@ -22,6 +22,7 @@ import {
   inviteAgain,
   reactivatePerson,
   resetCodes,
+  signOutEverywhere,
 } from "#app/services/people/manage-people.server.ts";
 import { proveAgain } from "#app/services/people/recent-proof.server.ts";
 import type { Route } from "./+types/person";
@@ -29,6 +30,7 @@ import type { Route } from "./+types/person";
 const DONE = {
   invited: "The invitation is on its way.",
   roles: "The roles are changed. They count from the next page on.",
+  out: "Every session of the account has ended. They may sign in again.",
   reset: "The one-time codes are taken off, and every session of the account has ended. A mail tells them.",
   deactivated: "The account is deactivated, and every session of it has ended.",
 };
@@ -65,6 +67,10 @@ export async function action({ request, context, params: { personId } }: Route.A
   if (intent === "reactivate") {
     await reactivatePerson(proven.scope, personId);
     throw done("invited");
+  }
+  if (intent === "sign out") {
+    await signOutEverywhere(proven.scope, personId);
+    throw done("out");
   }
   if (intent === "reset codes") {
     await resetCodes(proven.scope, personId);
@@ -123,6 +129,14 @@ export default function PersonRoute({ loaderData, actionData }: Route.ComponentP
       {!isSelf && (
         <HungSection title="Account">
           <div className="max-w-160 space-y-4">
+            {state === "active" && (
+              <Form method="post" className="space-y-2">
+                <input type="hidden" name="intent" value="sign out" />
+                <p>A device is lost, or somebody else may be at it: end every session. The account stays as it is.</p>
+                <ProofFields asked={proofAsked} fault={faultOf("sign out")} label="Your password, to sign them out" />
+                <SubmitButton busy="Signing out">Sign out everywhere</SubmitButton>
+              </Form>
+            )}
             {state === "invited" && <Deed intent="invite" button="Send the invitation again" busy="Sending" />}
             {state !== "deactivated" ? (
               <Deed intent="deactivate" button="Deactivate" busy="Deactivating" removes>
