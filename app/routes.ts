@@ -185,6 +185,7 @@ export default [
     route("search", "routes/_app/search.tsx"),
     route("search/found", "routes/_app/search-found.ts"),
     route("jobs", "routes/_app/jobs.tsx"),
+    route("changes", "routes/_app/changes.ts"),
     ...prefix("sheets", [
       index("routes/_app/sheets/list.tsx"),
       route("drafts", "routes/_app/sheets/drafts.tsx"),

@@ -51,6 +51,7 @@ export interface ReviewView {
   assessment: { id: string; name: string; number: string; letter: string; program: string };
   /** number of its sheet; null before the first review of its flow */
   sheet: string | null;
+  sheetId: string | null;
   /** the newest attempt of this assessment; null when no review was ever asked for */
   revision: ReviewRevision | null;
   steps: { number: number; title: string }[];

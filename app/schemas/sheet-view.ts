@@ -50,6 +50,7 @@ export interface RevisionView {
   /** null for a guest, as is all that follows */
   staff: null | {
     assessmentId: string;
+    sheetId: string;
     prints: PrintView[];
     revisions: { id: string; letter: string; state: RevisionState; at: string }[];
     mayWithdraw: boolean;

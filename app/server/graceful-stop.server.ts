@@ -1,4 +1,5 @@
 import { closeOrm } from "#app/db/orm.server.ts";
+import { stopHearing } from "./changes.server.ts";
 import { log } from "./log.server.ts";
 
 const LONGEST_WAIT = 10_000;
@@ -14,6 +15,8 @@ export function stopGracefully(): void {
   const stop = (signal: NodeJS.Signals) => {
     log.info({ signal }, "stopping");
     setTimeout(() => process.exit(0), LONGEST_WAIT).unref();
+    // Who listens for changes would hold a request for minutes.
+    void stopHearing();
     // Requests under way hold the pool until they are done, so closing it waits for them.
     void closeOrm().finally(() => setTimeout(() => process.exit(0), 100));
   };

@@ -156,6 +156,7 @@ const DOORS: Record<string, Door> = {
   "/search": signedIn(),
   "/search/found": signedIn(),
   "/jobs": inSome("see the work"),
+  "/changes": signedIn(400),
   "/incidents": inSome("see the work"),
   "/incidents/new": inSome("report incidents"),
   "/incidents/rates": inSome("see the work"),

@@ -1,4 +1,5 @@
 import { Link } from "react-router";
+import { ChangedNotice } from "#app/components/changes/ChangedNotice.tsx";
 import { Cautions } from "#app/components/cautions/Cautions.tsx";
 import { AnswerLine } from "#app/components/drawings/AnswerLine.tsx";
 import { chooseExaggeration } from "#app/components/drawings/choose-exaggeration.ts";
@@ -37,6 +38,9 @@ export function AssessmentPage({ view, changed, refused }: Props) {
   return (
     <>
       <AssessmentTop head={head} leg={legNumber} refused={refused} />
+      <ChangedNotice of={`flow:${head.flow.id}`} since={head.id} title="Its flow was changed or assessed anew.">
+        Somebody did so since you opened this page.
+      </ChangedNotice>
       <article className="frame max-tablet:-mx-4 max-tablet:border-x-0">
         <AnswerLine outcome={outcome} where={where ?? undefined} sentences={sentences} figures={figures.map(linked)} />
         {view.legs ? <LegList legs={view.legs} /> : null}

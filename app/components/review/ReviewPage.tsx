@@ -1,4 +1,5 @@
 import { Link } from "react-router";
+import { ChangedNotice } from "#app/components/changes/ChangedNotice.tsx";
 import { PageHead } from "#app/components/layout/PageHead.tsx";
 import { noBreak } from "#app/components/drawings/no-break.ts";
 import { minuteOf } from "#app/lib/minute-of.ts";
@@ -35,6 +36,15 @@ export function ReviewPage({ view, answer }: Props) {
           </Link>
         }
       />
+      {view.sheetId && (
+        <ChangedNotice
+          of={`sheet:${view.sheetId}`}
+          since={`${revision?.id ?? ""} ${revision?.state ?? ""}`}
+          title="Somebody has moved this review on since you opened it."
+        >
+          What you have typed is not lost until you leave the page.
+        </ChangedNotice>
+      )}
       <div>
         <ReviewState view={view} />
         {!inReview && <AskReview view={view} answer={answer} />}

@@ -33,6 +33,7 @@ import { PrintRetention } from "./2026-12-18-print-retention.ts";
 import { AuditSeal } from "./2026-12-19-audit-seal.ts";
 import { Webhooks } from "./2026-12-20-webhooks.ts";
 import { OneTimeCodes } from "./2026-12-20-one-time-codes.ts";
+import { Changes } from "./2026-12-21-changes.ts";
 
 /** Every migration in the order in which it runs. */
 export const migrations = [
@@ -71,4 +72,5 @@ export const migrations = [
   { name: "2026-12-19-audit-seal", class: AuditSeal },
   { name: "2026-12-20-webhooks", class: Webhooks },
   { name: "2026-12-20-one-time-codes", class: OneTimeCodes },
+  { name: "2026-12-21-changes", class: Changes },
 ];

@@ -1,7 +1,7 @@
-import { Link, redirect } from "react-router";
+import { Link, redirect, useRevalidator } from "react-router";
+import { useChanges } from "#app/components/changes/use-changes.ts";
 import { JobList } from "#app/components/jobs/JobList.tsx";
 import { JOB_WORDS } from "#app/components/jobs/job-words.ts";
-import { useLookingAgain } from "#app/components/jobs/use-looking-again.ts";
 import { PageHead } from "#app/components/layout/PageHead.tsx";
 import { EmptyState } from "#app/components/ui/EmptyState.tsx";
 import { ListHead } from "#app/components/ui/ListHead.tsx";
@@ -46,8 +46,14 @@ export async function action({ request, context, url }: Route.ActionArgs) {
 }
 
 export default function Jobs({ loaderData: { jobs, programs, searched, mayUpload } }: Route.ComponentProps) {
-  const underWay = jobs.filter(({ state }) => state === "waiting" || state === "running").length;
-  useLookingAgain(underWay > 0);
+  const open = jobs.filter(({ state }) => state === "waiting" || state === "running");
+  const underWay = open.length;
+  const { revalidate } = useRevalidator();
+  useChanges(
+    open.map(({ id }) => `job:${id}` as const),
+    "",
+    { own: true, changed: () => void revalidate() },
+  );
   return (
     <>
       <PageHead

@@ -39,6 +39,7 @@ export async function reviewPage(scope: ActorScope, assessmentId: string | undef
         program: program.name,
       },
       sheet: sheet && recordNumber("sheet", program.slug, sheet.number),
+      sheetId: sheet && sheet.id,
       revision: revision?.view ?? null,
       steps: result.steps.map(({ number, title }) => ({ number, title })),
       blocking: blockingFindings(result),

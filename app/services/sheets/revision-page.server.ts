@@ -95,6 +95,7 @@ async function forStaff(
   );
   return {
     assessmentId: revision.assessment.id,
+    sheetId: revision.sheet.id,
     prints: prints.map(({ createdBy, createdAt, place, file }) => ({
       by: createdBy.name,
       at: createdAt.toISOString(),

@@ -1,5 +1,6 @@
 import type { SubmissionResult } from "@conform-to/react";
 import { Link } from "react-router";
+import { ChangedNotice } from "#app/components/changes/ChangedNotice.tsx";
 import { noBreak } from "#app/components/drawings/no-break.ts";
 import { PageHead } from "#app/components/layout/PageHead.tsx";
 import { HungSection } from "#app/components/ui/HungSection.tsx";
@@ -36,6 +37,11 @@ export function RevisionPage({ view, paper, answer }: Props) {
           )
         }
       />
+      {staff && (
+        <ChangedNotice of={`sheet:${staff.sheetId}`} since={`${id} ${state}`} title="This sheet has just changed.">
+          Another revision was asked for, released, returned or withdrawn.
+        </ChangedNotice>
+      )}
       <div>
         <Standing view={view} />
         <HungSection title="Read">

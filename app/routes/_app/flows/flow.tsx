@@ -1,4 +1,5 @@
 import { data, Link, redirect, type ShouldRevalidateFunctionArgs } from "react-router";
+import { ChangedNotice } from "#app/components/changes/ChangedNotice.tsx";
 import { FlowAnswer } from "#app/components/flows/FlowAnswer.tsx";
 import { FlowConflictNotice } from "#app/components/flows/FlowConflictNotice.tsx";
 import { FlowFigures } from "#app/components/flows/FlowFigures.tsx";
@@ -73,6 +74,13 @@ export default function FlowRoute({ loaderData: flow, actionData }: Route.Compon
           </>
         }
       />
+      <ChangedNotice
+        of={`flow:${flow.id}`}
+        since={`${stamp.version} ${assessments.length}`}
+        title="Somebody has changed or assessed this flow since you opened it."
+      >
+        What you do to its steps is refused until you have seen theirs.
+      </ChangedNotice>
       {conflicted && (
         <FlowConflictNotice
           conflict={conflicted.conflict}

@@ -1,4 +1,5 @@
 import { Link, redirect } from "react-router";
+import { ChangedNotice } from "#app/components/changes/ChangedNotice.tsx";
 import { SubmitButton } from "#app/components/forms/SubmitButton.tsx";
 import { PageHead } from "#app/components/layout/PageHead.tsx";
 import { RemoveStack } from "#app/components/stacks/RemoveStack.tsx";
@@ -62,6 +63,13 @@ export default function Stack({ loaderData, actionData }: Route.ComponentProps) 
           </>
         }
       />
+      <ChangedNotice
+        of={`stack:${id}`}
+        since={String(stamp.version)}
+        title="Somebody has saved this stack since you opened it."
+      >
+        {mayEdit ? "When you save, you choose what stays of both." : "What you see is the stack as it was."}
+      </ChangedNotice>
       {mayEdit ? (
         <StackEditor
           key={`${id} ${saves}`}
