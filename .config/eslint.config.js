@@ -99,6 +99,8 @@ export default tseslint.config(
   },
   {
     files: ["app/cli/**/*.mjs"],
-    rules: { "no-console": "off" },
+    rules: {
+      // Nothing else reads these before they run: two imports of one name, as a merge can leave them, stop the start.
+      "no-redeclare": "error", "no-console": "off" },
   },
 );

@@ -22,7 +22,6 @@ import { prepareDatabase } from "./prepare.mjs";
 import { makeOwnFolder, ownFolder } from "./project.mjs";
 import { keptSecretKey } from "./secrets.mjs";
 import { stopRecorded } from "./run-record.mjs";
-import { keptSecretKey } from "./secrets.mjs";
 import { Sentence, printFailure } from "./sentence.mjs";
 import { serveBuild, serveSources } from "./server.mjs";
 import { keepWorker } from "./worker.mjs";

@@ -123,11 +123,11 @@ describe("what lies beyond a person's reach", () => {
       const { groups } = await found(guest, query);
       for (const { kind } of groups) expect(["place", "method"]).toContain(kind);
       for (const { path } of groups.flatMap(({ rows }) => rows))
-        expect(path).toMatch(/^\/(sheets|method.*|preferences(\/mail)?|search|account|tokens|api)?$/);
+        expect(path).toMatch(/^\/(sheets|method.*|preferences(\/mail)?|search|account|tokens|webhooks|api)?$/);
     }
     expect(namesOf(await found(guest, "e"), "place")).toEqual([
       ...["E-mail", "Sheets", "Method", "Preferences"],
-      ...["Account", "API tokens", "API"],
+      ...["Account", "API tokens", "Webhooks", "API"],
     ]);
   });
 
