@@ -101,6 +101,8 @@ export default tseslint.config(
     files: ["app/cli/**/*.mjs"],
     rules: {
       // Nothing else reads these before they run: two imports of one name, as a merge can leave them, stop the start.
-      "no-redeclare": "error", "no-console": "off" },
+      "no-redeclare": "error",
+      "no-console": "off",
+    },
   },
 );
