@@ -36,6 +36,6 @@ test("who has a stack open is told that somebody saved it, also where the server
   await expect(other.getByText(TITLE)).toBeHidden();
   await expectNoAxeFindings(page);
   await page.getByRole("link", { name: "Show it as it is now" }).click();
-  await expect(page.getByLabel("Remaining silicon")).toHaveValue("321 µm");
+  await expect(page.getByLabel("Remaining silicon")).toHaveValue("321 um");
   await expect(page.getByText(TITLE)).toBeHidden();
 });

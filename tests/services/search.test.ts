@@ -123,11 +123,13 @@ describe("what lies beyond a person's reach", () => {
       const { groups } = await found(guest, query);
       for (const { kind } of groups) expect(["place", "method"]).toContain(kind);
       for (const { path } of groups.flatMap(({ rows }) => rows))
-        expect(path).toMatch(/^\/(sheets|method.*|preferences(\/mail)?|search|account|tokens|webhooks|api)?$/);
+        expect(path).toMatch(
+          /^\/(sheets|method.*|preferences(\/mail)?|search|account(\/codes)?|tokens|webhooks|api)?$/,
+        );
     }
     expect(namesOf(await found(guest, "e"), "place")).toEqual([
       ...["E-mail", "Sheets", "Method", "Preferences"],
-      ...["Account", "API tokens", "Webhooks", "API"],
+      ...["Account", "One-time codes", "API tokens", "Webhooks"],
     ]);
   });
 
