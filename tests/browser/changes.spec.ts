@@ -10,6 +10,9 @@ test("who has a stack open is told that somebody saved it, also where the server
   await page.goto("/stacks?sort=name");
   await page.getByRole("link", { name: "Tern T-2, one redistribution layer", exact: true }).click();
   await page.getByRole("link", { name: "Copy", exact: true }).click();
+  // The page of the stack itself has the same fields.
+  await expect(page).toHaveURL(/\/stacks\/new\?from=/);
+  await expect(page.getByRole("heading", { level: 1, name: "New stack" })).toBeVisible();
   const name = `Told ${Date.now().toString(36)}`;
   await page.getByLabel("Name", { exact: true }).fill(name);
   await page.getByRole("button", { name: "Save stack" }).click();

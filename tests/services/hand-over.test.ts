@@ -136,8 +136,10 @@ describe("a place that is handed over", () => {
     expect(waits.total).toBe(2);
     expect(waits.rows[0]?.words).toMatch(/^\d lots?, given by /);
     expect(await refusal(takeOver(technician, tern?.id, ""))).toContain("Somebody of the next shift takes it");
-    await takeOver(lead, tern?.id, "All there");
-    await takeOver(lead, tern?.id, "Pressed twice");
+    // The lots of the other program at that place have a record of their own, to which the taking leads on.
+    const petrel = (await rows(lead)).find(({ program }) => program === "Petrel");
+    expect(await takeOver(lead, tern?.id, "All there")).toBe(petrel?.id);
+    expect(await takeOver(lead, tern?.id, "Pressed twice")).toBe(petrel?.id);
     const view = await handOver(technician, tern?.id);
     expect(view).toMatchObject({ taken: { by: lead.actor.name }, takenRemark: "All there", mayTake: false, moved: [] });
     const engineer = await scopeOfPerson(database, "engineer");

@@ -33,8 +33,10 @@ export function useChanges(
       if (isChange) told();
     };
     const askNow = async () => {
-      const answer = await fetch(`${address}&once`).catch(() => null);
+      const answer = await fetch(`${address}&once`, { redirect: "manual" }).catch(() => null);
       if (answer?.ok) stands((await answer.json()) as StandNow);
+      // Signed out, or the record is gone: asking on tells nothing. A server that can't be reached may come back.
+      else if (answer && answer.status < 500) end();
     };
     const listen = () => {
       source = new EventSource(address);

@@ -16,17 +16,24 @@ interface Props {
   person: { id: string; name: string };
   /** ISO, for the clocks */
   now: string;
+  /** the one before it, of the same place and another program, was taken just now */
+  isNext: boolean;
   lastResult: SubmissionResult<string[]> | null | undefined;
 }
 
 /** What was left at a place, lot by lot, and its taking over. */
-export function HandOverPage({ handOver, person, now, lastResult }: Props) {
+export function HandOverPage({ handOver, person, now, isNext, lastResult }: Props) {
   const { place, program, by, at, remark, content, moved, mayTake, takenRemark, taken } = handOver;
   return (
     <>
       <FloorHead person={person.name} personId={person.id} />
       <main id="main" className="mx-auto max-w-240 px-4 py-6 tablet:px-6">
         <KeptLine checkedAt={now} what="It is taken with a connection, or on paper." />
+        {isNext && mayTake && (
+          <p role="status" className="mb-3 border-l-4 border-clear bg-raised p-3 text-lead">
+            That is taken. At the same place lots of {program} wait for you too.
+          </p>
+        )}
         <h1 className="text-answer font-medium wrap-anywhere">{place}</h1>
         <p className="text-lead text-quiet">
           {program}. Given by {by}, {minuteOf(at)}.

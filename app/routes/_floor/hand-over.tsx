@@ -10,20 +10,21 @@ export const meta: Route.MetaFunction = ({ loaderData }) => [
   { title: `${loaderData ? `Hand-over of ${loaderData.handOver.place}` : "Hand-over"} · Floor · Planeward` },
 ];
 
-export async function loader({ context, params }: Route.LoaderArgs) {
+export async function loader({ context, params, url }: Route.LoaderArgs) {
   const scope = scopeOf(context);
   return {
     handOver: await handOver(scope, params.handOverId),
     person: { id: scope.actor.id, name: scope.actor.name },
     now: new Date().toISOString(),
+    isNext: url.searchParams.has("next"),
   };
 }
 
 export async function action({ request, context, params }: Route.ActionArgs) {
   const { submission } = await readForm(request, takeForm);
   if (submission.status !== "success") return data({ lastResult: submission.reply() }, { status: 400 });
-  await takeOver(scopeOf(context), params.handOverId, submission.value.remark);
-  throw redirect(`/floor/hand-overs/${params.handOverId}`);
+  const next = await takeOver(scopeOf(context), params.handOverId, submission.value.remark);
+  throw redirect(next === null ? `/floor/hand-overs/${params.handOverId}` : `/floor/hand-overs/${next}?next`);
 }
 
 export default function HandOver({ loaderData, actionData }: Route.ComponentProps) {

@@ -168,10 +168,11 @@ export async function giveOver(scope: ActorScope, { given, place, remark, lots }
 
 /**
  * Takes a place over: whoever does answers for its lots from then on.
+ * @returns what was given at the same time of another program and waits for this person too; null when nothing does
  * @throws 404 for one that is not there, 403 for one's own, 409 for one that was taken or given anew
  */
-export async function takeOver(scope: ActorScope, id: string | undefined, remark: string): Promise<void> {
-  await inScope(scope, async (em) => {
+export async function takeOver(scope: ActorScope, id: string | undefined, remark: string): Promise<string | null> {
+  return inScope(scope, async (em) => {
     const found = await findHandOver(em, id);
     if (!found || !mayInProgram(scope.actor, FLOOR, found.program.id)) throw notFound("hand-over");
     if (found.givenBy.id === scope.actor.id)
@@ -180,12 +181,25 @@ export async function takeOver(scope: ActorScope, id: string | undefined, remark
     await em.refresh(found, POPULATE);
     if (found.takenAt) {
       // Sent again by whoever took it, it counts once.
-      if (found.takenBy?.id === scope.actor.id) return;
+      if (found.takenBy?.id === scope.actor.id) return alsoGiven(em, scope, found.given);
       throw problem(409, `${found.takenBy?.name ?? "Somebody"} has taken this over already. Ask them.`);
     }
     if ((await replacedAmong(em, [found])).has(found.id))
       throw problem(409, `${found.place} was handed over again since. Open the newest one, and take that.`);
     Object.assign(found, { takenAt: new Date(), takenBy: scope.actor.id, takenRemark: remark });
     await em.flush();
+    return alsoGiven(em, scope, found.given);
   });
+}
+
+/** What else was given at once and waits for this person: a place has lots of several programs, each with a record of its own. */
+async function alsoGiven(em: EntityManager, { actor }: ActorScope, given: string): Promise<string | null> {
+  const programs = programsWhere(actor, FLOOR).map(({ programId }) => programId);
+  const waiting = await waitingToBeTaken(em, actor, programs);
+  const next = await em.findOne(
+    HandOver,
+    { given, id: { $in: waiting.map(({ id }) => id) } },
+    { orderBy: { id: "asc" } },
+  );
+  return next?.id ?? null;
 }
