@@ -1,11 +1,12 @@
-import { getCollectionProps, getFormProps, type FieldMetadata, type SubmissionResult } from "@conform-to/react";
+import { getFormProps, type SubmissionResult } from "@conform-to/react";
 import { Form } from "react-router";
+import { CheckList } from "#app/components/forms/CheckList.tsx";
 import { ChoiceField } from "#app/components/forms/ChoiceField.tsx";
 import { LineField } from "#app/components/forms/LineField.tsx";
 import { SubmitButton } from "#app/components/forms/SubmitButton.tsx";
 import { ProofFields } from "#app/components/people/ProofFields.tsx";
 import { useRecordForm } from "#app/components/forms/use-record-form.ts";
-import { API_SCOPE_NAMES, API_SCOPES, TOKEN_LIVES, type ApiScope, type TokensView } from "#app/schemas/api-token.ts";
+import { API_SCOPE_NAMES, API_SCOPES, TOKEN_LIVES, type TokensView } from "#app/schemas/api-token.ts";
 import type { ProofAsked, ProofFault } from "#app/schemas/proof.ts";
 
 interface Props {
@@ -46,26 +47,17 @@ export function MakeToken({ programs, lastResult, proofAsked, proofFault }: Prop
           blank="Choose a program"
           hint="It sees no other."
         />
-        <Scopes field={scopes} />
+        <CheckList
+          field={scopes}
+          legend="What it may do"
+          options={API_SCOPE_NAMES}
+          words={(scope) => API_SCOPES[scope]}
+          hint="As little as it needs."
+        />
         <ChoiceField field={days} label="Good for" choices={LIVES} hint="It can be revoked at any time." />
         <ProofFields asked={proofAsked} fault={proofFault} label="Your password, to make it" />
         <SubmitButton busy="Making">Make the token</SubmitButton>
       </Form>
     </section>
-  );
-}
-
-function Scopes({ field }: { field: FieldMetadata<string[]> }) {
-  return (
-    <fieldset className="field" aria-describedby={field.errorId}>
-      <legend className="mb-1 text-label text-quiet">What it may do</legend>
-      {getCollectionProps(field, { type: "checkbox", options: [...API_SCOPE_NAMES] }).map(({ key, ...box }) => (
-        <label key={key} className="mb-0 flex min-h-8 items-center gap-2 text-body text-ink">
-          <input {...box} className="size-4 accent-ink" />
-          <span>{API_SCOPES[box.value as ApiScope]}</span>
-        </label>
-      ))}
-      <small id={field.errorId}>{field.errors?.[0] ?? "As little as it needs."}</small>
-    </fieldset>
   );
 }

@@ -1,11 +1,12 @@
-import { getCollectionProps, getFormProps, type FieldMetadata, type SubmissionResult } from "@conform-to/react";
+import { getFormProps, type SubmissionResult } from "@conform-to/react";
 import { Form } from "react-router";
+import { CheckList } from "#app/components/forms/CheckList.tsx";
 import { ChoiceField } from "#app/components/forms/ChoiceField.tsx";
 import { LineField } from "#app/components/forms/LineField.tsx";
 import { SubmitButton } from "#app/components/forms/SubmitButton.tsx";
 import { useRecordForm } from "#app/components/forms/use-record-form.ts";
 import { ProofFields } from "#app/components/people/ProofFields.tsx";
-import { eventWords, WEBHOOK_EVENT_NAMES, type WebhookEventName, type WebhooksView } from "#app/schemas/webhook.ts";
+import { eventWords, WEBHOOK_EVENT_NAMES, type WebhooksView } from "#app/schemas/webhook.ts";
 import type { ProofAsked, ProofFault } from "#app/schemas/proof.ts";
 
 interface Props {
@@ -45,27 +46,16 @@ export function MakeWebhook({ programs, lastResult, proofAsked, proofFault }: Pr
           hint="Put no password into it: every delivery is signed."
           input={{ inputMode: "url", autoCapitalize: "none", spellCheck: false, placeholder: "https://" }}
         />
-        <Events field={events} />
+        <CheckList
+          field={events}
+          legend="When it is told"
+          options={WEBHOOK_EVENT_NAMES}
+          words={eventWords}
+          hint="It is told what your own role may read, and nothing more."
+        />
         <ProofFields asked={proofAsked} fault={proofFault} label="Your password, to make it" />
         <SubmitButton busy="Making">Make the webhook</SubmitButton>
       </Form>
     </section>
-  );
-}
-
-function Events({ field }: { field: FieldMetadata<string[]> }) {
-  return (
-    <fieldset className="field" aria-describedby={field.errorId}>
-      <legend className="mb-1 text-label text-quiet">When it is told</legend>
-      {getCollectionProps(field, { type: "checkbox", options: [...WEBHOOK_EVENT_NAMES] }).map(({ key, ...box }) => (
-        <label key={key} className="mb-0 flex min-h-8 items-center gap-2 text-body text-ink">
-          <input {...box} className="size-4 accent-ink" />
-          <span>{eventWords(box.value as WebhookEventName)}</span>
-        </label>
-      ))}
-      <small id={field.errorId}>
-        {field.errors?.[0] ?? "It is told what your own role may read, and nothing more."}
-      </small>
-    </fieldset>
   );
 }
